@@ -1,0 +1,21 @@
+// The site: server-rendered by default, with React only where a page must answer the hand at once.
+import { defineConfig } from 'astro/config';
+import node from '@astrojs/node';
+import react from '@astrojs/react';
+import mdx from '@astrojs/mdx';
+import tailwind from '@astrojs/tailwind';
+
+export default defineConfig({
+  output: 'server',
+  // Our own HTTP server stands in front (src/processes/web.ts): it knows limits, ranges and graceful stop.
+  adapter: node({ mode: 'middleware' }),
+  integrations: [react(), mdx(), tailwind({ applyBaseStyles: false })],
+  trailingSlash: 'ignore',
+  // Our middleware checks origins against the address set at run time; Astro's own check is frozen at build time.
+  security: { checkOrigin: false },
+  experimental: { liveContentCollections: true },
+  devToolbar: { enabled: false },
+  vite: {
+    ssr: { external: ['sequelize', 'mariadb', 'sharp', '@node-rs/argon2', 'stripe', 'nodemailer', 'multer'] },
+  },
+});
