@@ -1,0 +1,236 @@
+/**
+ * A piece as a person describes it: loom, width, spacing, yarns, and the bands in
+ * the order they are woven. Everything else (ends, rows, yarn, hours, the drawing)
+ * is reckoned from this.
+ *
+ * Lengths are millimetres, masses grams, linear density tex. Shares such as draw-in
+ * and margins are fractions: 0.02 is two per cent.
+ */
+
+export type CountSystem =
+  | 'ne-cotton'
+  | 'ne-worsted'
+  | 'nm'
+  | 'lea'
+  | 'run'
+  | 'denier'
+  | 'jute'
+  | 'yorkshire'
+  | 'grain';
+
+/** A count as it stands on a label: `{ text: '8/2', system: 'ne-cotton' }`. */
+export interface YarnCount {
+  readonly text: string;
+  readonly system: CountSystem;
+}
+
+/** How thick the yarn is, said in exactly one way. */
+export type YarnGrist =
+  | { readonly tex: number; readonly metresPer100g?: never; readonly count?: never }
+  | { readonly metresPer100g: number; readonly tex?: never; readonly count?: never }
+  | { readonly count: YarnCount; readonly tex?: never; readonly metresPer100g?: never };
+
+export interface YarnTraits {
+  readonly label?: string;
+  /** `#rrggbb` */
+  readonly colour?: string;
+  /** Strands taken together as one thread; 1 when missing. The grist is that of one strand. */
+  readonly strands?: number;
+  /** Ashenhurst's K, 0.75 to 1; 0.90 for warp and 0.84 for weft when missing. */
+  readonly ashenhurstK?: number;
+  /** Snug wraps in an inch, measured; 1 to 60. */
+  readonly wrapsPerInch?: number;
+  readonly ball?: { readonly metres: number; readonly grams: number };
+  readonly fibre?: string;
+}
+
+export type Yarn = YarnTraits & YarnGrist;
+
+export type Warping = 'zigzag' | 'two-nail';
+
+export interface Loom {
+  /** From one nail to the next along a rail, centre to centre. */
+  readonly nailPitchMm: number;
+  readonly warping: Warping;
+  /** 1 uses every nail, 2 every second one … */
+  readonly everyNthNail?: number;
+  readonly nailDiameterMm?: number;
+  /** From the nails of one rail to the nails of the other. */
+  readonly insideHeightMm: number;
+  readonly insideWidthMm?: number;
+}
+
+export type EndsTogether = 1 | 2;
+export type Parity = 'any' | 'even' | 'odd';
+
+export interface Warp {
+  readonly yarn: Yarn;
+  /** 2 weaves every two neighbouring ends as one. */
+  readonly endsTogether?: EndsTogether;
+  /** What the pattern asks of the number of working ends. */
+  readonly parity?: Parity;
+  /** The number of ends when it is fixed by hand; otherwise reckoned from the width. */
+  readonly endCount?: number;
+  /** Warp used for tying at the first and at the last nail, each. */
+  readonly tieMm?: number;
+}
+
+/** How closely the rows are beaten: by the yarn's own thickness, or as counted on a swatch. */
+export type Beat =
+  | { readonly picksPerWeftDiameter: number; readonly picksPerCm?: never }
+  | { readonly picksPerCm: number; readonly picksPerWeftDiameter?: never };
+
+export type WeaveMode = 'straight-warp' | 'balanced';
+
+export interface Allowances {
+  readonly drawIn?: number;
+  readonly relaxation?: number;
+  readonly wetShrinkage?: number;
+  /** Warp left unwoven at the top and at the bottom of the loom. */
+  readonly topMm?: number;
+  readonly bottomMm?: number;
+  /** Yarn left hanging where a weft begins or ends. */
+  readonly tailMm?: number;
+  /** Yarn on one shuttle or butterfly. */
+  readonly loadMm?: number;
+  readonly marginWeft?: number;
+  readonly marginWarp?: number;
+}
+
+export interface Dowel {
+  readonly diameterMm: number;
+  readonly lengthMm?: number;
+}
+
+export type ShapeKind = 'triangle' | 'rectangle' | 'circle';
+export type ShapeJoin = 'slit' | 'dovetail' | 'interlock';
+
+/** A figure woven into the ground of a tabby band. */
+export interface Shape {
+  readonly shape: ShapeKind;
+  readonly yarn: string;
+  /** Triangle and rectangle: width of the first row. */
+  readonly baseMm?: number;
+  /** Triangle and rectangle. */
+  readonly heightMm?: number;
+  /** Circle. */
+  readonly radiusMm?: number;
+  /** Middle of the base, from the left selvedge; the middle of the piece when missing. */
+  readonly centreMm?: number;
+  /** From the band's first row; 0 when missing. */
+  readonly bottomMm?: number;
+  /** How far the top stands to the right (negative: left) of the base's middle. */
+  readonly leanMm?: number;
+  /** Steps alike on both sides; true when missing, unless the shape leans. */
+  readonly symmetric?: boolean;
+  /** How the colours meet; `slit` when missing. */
+  readonly join?: ShapeJoin;
+}
+
+interface NamedBand {
+  /** How lessons refer to the band: `^[a-z0-9-]{1,40}$`, unique in the piece. */
+  readonly name?: string;
+}
+
+export type BandHeight =
+  | { readonly heightMm: number; readonly fill?: never }
+  | { readonly fill: true; readonly heightMm?: never };
+
+export type TabbyBand = NamedBand &
+  BandHeight & { readonly technique: 'tabby'; readonly yarn: string; readonly shapes?: readonly Shape[] };
+
+export interface SoumakBand extends NamedBand {
+  readonly technique: 'soumak';
+  readonly yarn: string;
+  readonly over: number;
+  readonly back: number;
+  readonly rows: number;
+  /** Picks of tabby between two rows of soumak. */
+  readonly tabbyBetween: number;
+  readonly tabbyYarn: string;
+}
+
+export interface RyaBand extends NamedBand {
+  readonly technique: 'rya';
+  readonly yarn: string;
+  /** Strands in one knot. */
+  readonly strands: number;
+  /** Ends in each of the knot's two legs. */
+  readonly legEnds: number;
+  readonly pileMm: number;
+  readonly trimMm: number;
+  readonly rows: number;
+  readonly heightMm: number;
+}
+
+export interface RovingBand extends NamedBand {
+  readonly technique: 'roving';
+  readonly yarn: string;
+  /** Ends the roving passes over, then under. */
+  readonly over: number;
+  /** How far it is puffed up from the cloth. */
+  readonly bulgeMm: number;
+  readonly heightMm: number;
+  readonly passes?: number;
+}
+
+export interface HemStitchBand extends NamedBand {
+  readonly technique: 'hem-stitch';
+  readonly yarn: string;
+  /** Ends drawn together by one stitch. */
+  readonly bundleEnds: number;
+  /** Rows the stitch reaches into the cloth. */
+  readonly reachPicks: number;
+}
+
+export type LoopSize =
+  | { readonly rodMm: number; readonly loopMm?: never }
+  | { readonly loopMm: number; readonly rodMm?: never };
+
+export type LoopPileBand = NamedBand &
+  LoopSize & {
+    readonly technique: 'loop-pile';
+    readonly yarn: string;
+    readonly rows: number;
+    readonly heightMm: number;
+  };
+
+export interface TwiningBand extends NamedBand {
+  readonly technique: 'twining';
+  readonly yarn: string;
+  readonly rows: number;
+}
+
+/** Every technique with the band it describes; a further technique is a further line here. */
+export interface BandByTechnique {
+  readonly tabby: TabbyBand;
+  readonly soumak: SoumakBand;
+  readonly rya: RyaBand;
+  readonly roving: RovingBand;
+  readonly 'hem-stitch': HemStitchBand;
+  readonly 'loop-pile': LoopPileBand;
+  readonly twining: TwiningBand;
+}
+
+export type TechniqueName = keyof BandByTechnique;
+export type Band = BandByTechnique[TechniqueName];
+
+export interface Piece {
+  readonly craft: 'frame-loom';
+  /** Finished size of the woven cloth, without fringe. */
+  readonly size: { readonly widthMm: number; readonly heightMm: number };
+  readonly loom: Loom;
+  readonly warp: Warp;
+  readonly beat: Beat;
+  readonly mode?: WeaveMode;
+  readonly allowances?: Allowances;
+  readonly dowel?: Dowel;
+  /** `turned` hangs with the end that was woven first at the top. */
+  readonly hangs?: 'as-woven' | 'turned';
+  /** Of the drawing's chance. */
+  readonly seed?: number;
+  /** By yarn role. */
+  readonly yarns: Readonly<Record<string, Yarn>>;
+  /** In the order they are woven. */
+  readonly bands: readonly Band[];
+}
