@@ -1,4 +1,4 @@
-import { failure, success, type Outcome } from '../outcome.ts';
+import { fail, succeed, type Outcome } from '../outcome.ts';
 import { currencySign, minorDigits, minorPerMajor, type Currency } from './currency.ts';
 import { formatPrice } from './format-price.ts';
 import { money, type Money } from './money.ts';
@@ -21,9 +21,9 @@ const LONGEST_TEXT = 40;
  */
 export function parsePrice(text: string, currency: Currency, range: PriceRange = ANY_PRICE): Outcome<Money> {
   const bare = withoutCurrency(text, currency);
-  if (bare === '') return refuse('price-missing', `The price is missing. Type it like ${example(currency)}.`);
+  if (bare === '') return refuse('E_PRICE_MISSING', `The price is missing. Type it like ${example(currency)}.`);
   if (bare === undefined || text.length > LONGEST_TEXT) {
-    return refuse('price-unreadable', `This is not a price in ${currency}. Type it like ${example(currency)}.`);
+    return refuse('E_PRICE_UNREADABLE', `This is not a price in ${currency}. Type it like ${example(currency)}.`);
   }
   const parts = readNumber(bare, minorDigits(currency));
   if (!parts.ok) return refuse(parts.code, explain(parts, currency));
@@ -31,39 +31,39 @@ export function parsePrice(text: string, currency: Currency, range: PriceRange =
   if (!Number.isSafeInteger(amountMinor) || amountMinor < range.leastMinor || amountMinor > range.mostMinor) {
     const least = formatPrice(money(range.leastMinor, currency));
     const most = formatPrice(money(range.mostMinor, currency));
-    return refuse('price-out-of-range', `Between ${least} and ${most} works.`);
+    return refuse('E_PRICE_RANGE', `Between ${least} and ${most} works.`);
   }
-  return success(money(amountMinor, currency));
+  return succeed(money(amountMinor, currency));
 }
 
 type NumberParts =
   | { readonly ok: true; readonly major: string; readonly minor: string }
-  | { readonly ok: false; readonly code: 'price-unreadable' | 'price-negative' | 'price-too-fine' | 'price-ambiguous'; readonly digits: string };
+  | { readonly ok: false; readonly code: 'E_PRICE_UNREADABLE' | 'E_PRICE_NEGATIVE' | 'E_PRICE_TOO_FINE' | 'E_PRICE_AMBIGUOUS'; readonly digits: string };
 
 function readNumber(text: string, digits: 0 | 2): NumberParts {
-  if (/^[-\u2212\u2013]/.test(text)) return { ok: false, code: 'price-negative', digits: '' };
+  if (/^[-\u2212\u2013]/.test(text)) return { ok: false, code: 'E_PRICE_NEGATIVE', digits: '' };
   const grouped = /^(\d{1,3}(?:([ '\u2019\u00a0\u202f\u2009]|[.,])\d{3})(?:\2\d{3})*)(?:([.,])(\d*))?$/.exec(text);
   if (grouped) return readGrouped(grouped, digits);
   const plain = /^(\d+)(?:[.,](\d*))?$/.exec(text) ?? /^()[.,](\d+)$/.exec(text);
-  if (!plain) return { ok: false, code: 'price-unreadable', digits: '' };
+  if (!plain) return { ok: false, code: 'E_PRICE_UNREADABLE', digits: '' };
   return finish(plain[1] ?? '', plain[2] ?? '', digits);
 }
 
 function readGrouped(match: RegExpExecArray, digits: 0 | 2): NumberParts {
   const [, whole = '', separator = '', point, minor = ''] = match;
   const sameSign = point !== undefined && point === separator;
-  if (sameSign) return { ok: false, code: 'price-unreadable', digits: '' };
+  if (sameSign) return { ok: false, code: 'E_PRICE_UNREADABLE', digits: '' };
   const groups = whole.split(separator);
   // One point or comma and three digits after it: thousands in one country, a tenth of a cent in the other.
   if (point === undefined && /[.,]/.test(separator) && groups.length === 2 && digits > 0) {
     if (whole.startsWith('0')) return finish(groups[0] ?? '', groups[1] ?? '', digits);
-    return { ok: false, code: 'price-ambiguous', digits: groups.join('') };
+    return { ok: false, code: 'E_PRICE_AMBIGUOUS', digits: groups.join('') };
   }
   return finish(groups.join(''), minor, digits);
 }
 
 function finish(major: string, minor: string, digits: 0 | 2): NumberParts {
-  if (minor.length > digits && /[1-9]/.test(minor.slice(digits))) return { ok: false, code: 'price-too-fine', digits: '' };
+  if (minor.length > digits && /[1-9]/.test(minor.slice(digits))) return { ok: false, code: 'E_PRICE_TOO_FINE', digits: '' };
   return { ok: true, major: major === '' ? '0' : major, minor: minor.slice(0, digits).padEnd(digits, '0') || '0' };
 }
 
@@ -82,13 +82,13 @@ function withoutCurrency(text: string, currency: Currency): string | undefined {
 
 function explain(refusal: { readonly code: string; readonly digits: string }, currency: Currency): string {
   switch (refusal.code) {
-    case 'price-negative':
+    case 'E_PRICE_NEGATIVE':
       return 'A price cannot be less than nothing.';
-    case 'price-too-fine':
+    case 'E_PRICE_TOO_FINE':
       return minorDigits(currency) === 0
         ? `${currency} has no smaller coin. Type a whole number.`
         : `Two digits after the point are the most. Type it like ${example(currency)}.`;
-    case 'price-ambiguous': {
+    case 'E_PRICE_AMBIGUOUS': {
       const thousands = refusal.digits;
       const first = thousands.slice(0, -3);
       return `This can be read in two ways. Type ${thousands} for the larger price, or ${first}.${thousands.slice(-3, -1)} for the smaller.`;
@@ -103,5 +103,5 @@ function example(currency: Currency): string {
 }
 
 function refuse(code: string, message: string): Outcome<Money> {
-  return failure({ code, path: '', message });
+  return fail([{ code, path: '', message }]);
 }

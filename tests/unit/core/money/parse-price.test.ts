@@ -41,26 +41,26 @@ describe('a typed price', () => {
   });
 
   test.each([
-    ['', 'price-missing'],
-    ['   ', 'price-missing'],
-    ['€', 'price-missing'],
-    ['sixty', 'price-unreadable'],
-    ['6 8', 'price-unreadable'],
-    ['68 USD', 'price-unreadable'],
-    ['6e3', 'price-unreadable'],
-    ['0x10', 'price-unreadable'],
-    ['1.2.3', 'price-unreadable'],
-    ['1.234.50', 'price-unreadable'],
-    ['NaN', 'price-unreadable'],
-    ['68'.padEnd(60, '0'), 'price-unreadable'],
-    ['-4', 'price-negative'],
-    ['\u22124,50', 'price-negative'],
-    ['68.0005', 'price-too-fine'],
-    ['0.005', 'price-too-fine'],
-    ['1.234', 'price-ambiguous'],
-    ['12,345', 'price-ambiguous'],
-    ['100000', 'price-out-of-range'],
-    ['99999999999999999999', 'price-out-of-range'],
+    ['', 'E_PRICE_MISSING'],
+    ['   ', 'E_PRICE_MISSING'],
+    ['€', 'E_PRICE_MISSING'],
+    ['sixty', 'E_PRICE_UNREADABLE'],
+    ['6 8', 'E_PRICE_UNREADABLE'],
+    ['68 USD', 'E_PRICE_UNREADABLE'],
+    ['6e3', 'E_PRICE_UNREADABLE'],
+    ['0x10', 'E_PRICE_UNREADABLE'],
+    ['1.2.3', 'E_PRICE_UNREADABLE'],
+    ['1.234.50', 'E_PRICE_UNREADABLE'],
+    ['NaN', 'E_PRICE_UNREADABLE'],
+    ['68'.padEnd(60, '0'), 'E_PRICE_UNREADABLE'],
+    ['-4', 'E_PRICE_NEGATIVE'],
+    ['\u22124,50', 'E_PRICE_NEGATIVE'],
+    ['68.0005', 'E_PRICE_TOO_FINE'],
+    ['0.005', 'E_PRICE_TOO_FINE'],
+    ['1.234', 'E_PRICE_AMBIGUOUS'],
+    ['12,345', 'E_PRICE_AMBIGUOUS'],
+    ['100000', 'E_PRICE_RANGE'],
+    ['99999999999999999999', 'E_PRICE_RANGE'],
   ])('%s is refused: %s', (text, code) => {
     expect(minorOf(text)).toBe(code);
   });
@@ -78,14 +78,14 @@ describe('a typed price', () => {
     expect(minorOf('6800', 'JPY')).toBe(6800);
     expect(minorOf('6.800', 'JPY')).toBe(6800);
     expect(minorOf('6800.00', 'JPY')).toBe(6800);
-    expect(minorOf('68.5', 'JPY')).toBe('price-too-fine');
+    expect(minorOf('68.5', 'JPY')).toBe('E_PRICE_TOO_FINE');
   });
 
   test('takes a bare dollar sign as the dollars of the price', () => {
     expect(minorOf('$68', 'USD')).toBe(6800);
     expect(minorOf('$68', 'CAD')).toBe(6800);
     expect(minorOf('CA$68', 'CAD')).toBe(6800);
-    expect(minorOf('$68', 'EUR')).toBe('price-unreadable');
+    expect(minorOf('$68', 'EUR')).toBe('E_PRICE_UNREADABLE');
   });
 
   test('reads back every price that is shown, and every price put into a field', () => {
