@@ -8,6 +8,8 @@ export default defineConfig({
   test: {
     projects: [
       { test: { name: 'unit', root, include: ['tests/unit/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' } },
+      // What talks to the outside, against the stand-ins; no database.
+      { test: { name: 'stand-ins', root, include: ['tests/server/{payments,stand-ins,mail}/**/*.test.ts'], environment: 'node' } },
     ],
   },
 });

@@ -1,0 +1,11 @@
+/** Heading: a few spaced picks in warp yarn. Stands for parts of the work that are not yet cloth. */
+import type { HeadingBand } from '../cloth-piece.ts';
+import { drawEnds } from '../ends.ts';
+import { drawPicks, rowsOver } from '../picks.ts';
+import type { Weave } from '../weave.ts';
+
+export function drawHeading(band: HeadingBand, height: number, weave: Weave): string {
+  const count = Math.max(1, Math.floor(height / (weave.minPick * 2.2)));
+  const picks = drawPicks(rowsOver(count, height / count, 0, weave.width), weave.minPick * 0.8, band.colour, 0.5, weave);
+  return picks.under + drawEnds(0, height, weave) + picks.over;
+}

@@ -1,0 +1,91 @@
+/**
+ * Rya: knots in a row, each with pile that falls over whatever lies below it, always towards the foot of the screen.
+ *
+ * Pile is most of what one sees, so each strand is drawn. Two rows of pile are made by chance and used in turn: the eye
+ * does not find the repeat and the markup stays small.
+ */
+import type { RyaBand } from '../cloth-piece.ts';
+import { light, shade } from '../colour.ts';
+import { ROUND, moved, num } from '../markup.ts';
+import { drawnRows } from '../weave.ts';
+import type { Weave } from '../weave.ts';
+import { drawGround } from './tabby.ts';
+
+/** Tabby that shows between knots is packed this close. */
+const GROUND_COVER = 0.7;
+
+/** Strands a picture shows for one knot: more would be finer than the eye sees at that size. */
+function drawnStrands(step: number, strands: number): number {
+  const room = step > 14 ? 6 : step > 9 ? 4 : 3;
+  return Math.max(2, Math.min(room, strands));
+}
+
+/** How far pile falls below its knot, in pixels. */
+export function ryaFall(band: RyaBand, unit: number, weave: Pick<Weave, 'pxPerMm' | 'longestPile'>): number {
+  return Math.min(Math.max(unit * 1.9, band.pileMm * weave.pxPerMm), weave.longestPile(unit * band.rows));
+}
+
+export function drawRya(band: RyaBand, height: number, weave: Weave): string {
+  const rows = Math.max(1, Math.min(band.rows, Math.floor(height / (weave.minPick * 3)) || 1));
+  const unit = height / rows;
+  const fall = ryaFall(band, height / band.rows, weave);
+  const groundRows = drawnRows(Math.max(2, height / weave.minPick), height, weave.minPick);
+  const step = knotStep(band, weave);
+  const kinds = [pileRow(band, step, fall, weave), pileRow(band, step, fall, weave)];
+  let drawn = drawGround(band.groundColour, groundRows, height, GROUND_COVER, weave);
+  for (let row = rows - 1; row >= 0; row--) {
+    drawn += drawPile(kinds[row % 2] ?? [], (row + 0.4) * unit, strandWidth(step), band.colour, weave);
+    drawn += drawKnots(step, (row + 0.4) * unit, band.colour, weave);
+  }
+  return drawn;
+}
+
+/** Pixels from knot to knot. */
+function knotStep(band: RyaBand, weave: Weave): number {
+  const real = (weave.end / weave.grouped) * band.knotEnds;
+  const knots = Math.max(1, Math.round(weave.width / Math.max(real, weave.end * 2)));
+  return weave.width / knots;
+}
+
+function strandWidth(step: number): number {
+  return Math.max(0.9, Math.min(step * 0.3, 7));
+}
+
+/** The strands of one row of knots, sorted by chance into three tones. */
+function pileRow(band: RyaBand, step: number, fall: number, weave: Weave): string[] {
+  const strands = drawnStrands(step, band.strands);
+  const tones = ['', '', ''];
+  for (let x = step / 2; x < weave.width; x += step) {
+    for (let strand = 0; strand < strands; strand++) {
+      const end = Math.round(fall * (0.86 + weave.chance() * 0.18));
+      const sway = (weave.chance() - 0.5) * step * 0.9;
+      const from = x + ((strand + 0.5) / strands - 0.5) * step * 0.8;
+      const tone = Math.floor(weave.chance() * 3);
+      tones[tone] += `M${num(from)} 0q${num(-sway)} ${Math.round(end * 0.55)} ${num(sway * 0.6)} ${end}`;
+    }
+  }
+  return tones;
+}
+
+function drawPile(tones: readonly string[], y: number, width: number, colour: string, weave: Weave): string {
+  const { paths } = weave;
+  const at = (x: number, off: number): string => ROUND + moved(x, y + off);
+  const paints = [shade(colour, 0.17), shade(colour, 0.07), colour];
+  let drawn = '';
+  for (const d of tones) drawn += paths.stroke(d, shade(colour, 0.5), width * 1.5, ` stroke-opacity=".5"${at(width * 0.4, width * 0.35)}`);
+  tones.forEach((d, tone) => (drawn += paths.stroke(d, paints[tone] ?? colour, width, at(0, 0))));
+  if (width > 1.4) drawn += paths.stroke(tones[2] ?? '', light(colour, 0.5), width * 0.3, at(-width * 0.18, 0));
+  return drawn;
+}
+
+function drawKnots(step: number, y: number, colour: string, weave: Weave): string {
+  const { paths } = weave;
+  const width = strandWidth(step);
+  let d = '';
+  for (let x = step / 2; x < weave.width; x += step) d += `M${num(x - step * 0.27)} 0h${num(step * 0.54)}`;
+  const at = (off: number): string => ROUND + moved(0, y + off);
+  let drawn = paths.stroke(d, shade(colour, 0.5), Math.max(2, width * 2), at(width * 0.3));
+  drawn += paths.stroke(d, colour, Math.max(1.6, width * 1.6), at(0));
+  if (width > 1.4) drawn += paths.stroke(d, light(colour, 0.4), width * 0.5, at(-width * 0.4));
+  return drawn;
+}

@@ -1,0 +1,74 @@
+/** A band of tabby, and the shapes (wedges, slopes, circles) woven into it. */
+import type { ClothShape, TabbyBand } from '../cloth-piece.ts';
+import { shade } from '../colour.ts';
+import { drawEnds } from '../ends.ts';
+import { box, dashes, num } from '../markup.ts';
+import { drawPicks, rowsOver } from '../picks.ts';
+import type { PickRow } from '../picks.ts';
+import { drawSelvedge } from '../selvedge.ts';
+import { drawnRows } from '../weave.ts';
+import type { Weave } from '../weave.ts';
+
+export function drawTabby(band: TabbyBand, height: number, weave: Weave): string {
+  const count = drawnRows(band.picks, height, weave.minPick);
+  const pitch = height / count;
+  const ground = drawGround(band.colour, count, height, band.cover, weave);
+  const shapes = band.shapes.map((shape) => drawShape(shape, shapeRows(shape, band, count, pitch, weave), pitch, band.cover, weave));
+  return ground + shapes.join('');
+}
+
+/** Plain tabby in one colour: what stands under shapes and pile alike. */
+export function drawGround(colour: string, count: number, height: number, cover: number, weave: Weave): string {
+  const pitch = height / count;
+  const rows = rowsOver(count, pitch, 0, weave.width);
+  const picks = drawPicks(rows, pitch, colour, cover, weave);
+  return (
+    box(0, 0, weave.width, height, shade(colour, 0.6)) +
+    picks.under +
+    drawEnds(0, height, weave) +
+    drawSelvedge(rows, pitch, colour, weave) +
+    picks.over
+  );
+}
+
+/** A band's slopes climb in about this many steps: hands step a wedge every few rows, and the eye reads the stair. */
+const STEPS = 14;
+
+/** The shape's rows on the screen: spans snapped to two drawn ends, rows gathered into steps. */
+function shapeRows(shape: ClothShape, band: TabbyBand, count: number, pitch: number, weave: Weave): PickRow[] {
+  const spans = new Map(shape.spans.map((span) => [span.row, span]));
+  const every = Math.max(1, Math.round(count / STEPS));
+  const rows: PickRow[] = [];
+  for (let row = 0; row < count; row++) {
+    const woven = weave.begin === 'head' ? row : count - 1 - row;
+    const step = Math.floor(woven / every) * every;
+    const span = spans.get(Math.floor(((step + every / 2) / count) * band.picks));
+    if (span === undefined) continue;
+    const a = snap(span.from, weave);
+    const b = snap(span.to, weave);
+    if (b - a < 2 * weave.end) continue;
+    const turned = weave.begin === 'head';
+    rows.push({ y: (row + 0.5) * pitch, odd: row % 2 === 1, x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
+  }
+  return rows;
+}
+
+function snap(end: number, weave: Weave): number {
+  const pairs = Math.round(end / weave.grouped / 2);
+  return Math.max(0, Math.min(weave.width, pairs * 2 * weave.end));
+}
+
+function drawShape(shape: ClothShape, rows: readonly PickRow[], pitch: number, cover: number, weave: Weave): string {
+  if (rows.length === 0) return '';
+  const { paths, end, warpWidth } = weave;
+  const stretch = rows.map((row) => `M${num(row.x0)} ${num(row.y)}H${num(row.x1)}`).join('');
+  const picks = drawPicks(rows, pitch, shape.colour, cover, weave);
+  const oneEnd = dashes(warpWidth * 0.8, end - warpWidth * 0.8, end / 2 - warpWidth * 0.4);
+  return (
+    paths.stroke(stretch, shade(shape.colour, 0.6), pitch + 0.4) +
+    picks.under +
+    paths.stroke(stretch, shade(weave.warpColour, 0.12), pitch + 0.2, oneEnd) +
+    drawSelvedge(rows, pitch, shape.colour, weave) +
+    picks.over
+  );
+}

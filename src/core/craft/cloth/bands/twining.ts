@@ -1,0 +1,24 @@
+/** Twining: two strands that cross between the ends, so every end carries one slanted stroke. */
+import type { TwiningBand } from '../cloth-piece.ts';
+import { light, shade } from '../colour.ts';
+import { drawEnds } from '../ends.ts';
+import { ROUND, box, moved, num } from '../markup.ts';
+import { drawnRows } from '../weave.ts';
+import type { Weave } from '../weave.ts';
+
+export function drawTwining(band: TwiningBand, height: number, weave: Weave): string {
+  const count = band.rows === 1 ? 1 : drawnRows(band.rows, height, weave.minPick * 1.3);
+  const pitch = height / count;
+  const rise = pitch * 0.22;
+  const { end, paths } = weave;
+  let d = '';
+  for (let x = 0; x < weave.width - end * 0.5; x += end) d += `M${num(x + end * 0.1)} ${num(rise)}l${num(end * 0.8)} ${num(-2 * rise)}`;
+  let drawn = box(0, 0, weave.width, height, shade(band.colour, 0.6)) + drawEnds(0, height, weave);
+  for (let row = 0; row < count; row++) {
+    const at = (off: number): string => ROUND + moved(0, (row + 0.5) * pitch + off);
+    drawn += paths.stroke(d, shade(band.colour, 0.55), pitch * 0.72, at(pitch * 0.1));
+    drawn += paths.stroke(d, band.colour, pitch * 0.56, at(0));
+    drawn += paths.stroke(d, light(band.colour, 0.28), pitch * 0.16, at(-pitch * 0.12));
+  }
+  return drawn;
+}

@@ -1,0 +1,13 @@
+/** Repeatable chance: the same seed always gives the same run of numbers, on every machine. */
+
+/**
+ * A source of numbers from 0 up to (not including) 1, by a linear congruence of 32 bits.
+ * Good enough to keep a band from looking printed; not for anything that must be unguessable.
+ */
+export function chanceFrom(seed: number): () => number {
+  let state = Math.trunc(seed) >>> 0 || 1;
+  return () => {
+    state = (Math.imul(state, 1664525) + 1013904223) >>> 0;
+    return state / 4294967296;
+  };
+}

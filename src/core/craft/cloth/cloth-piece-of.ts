@@ -1,0 +1,111 @@
+/** From a described piece and its plan to what the drawing needs. */
+import type { Band, Piece, Yarn } from '../piece.ts';
+import type { BandPlan, Plan } from '../plan.ts';
+import type { ClothBand, ClothShape, WovenPiece } from './cloth-piece.ts';
+import { NEUTRAL, mix, shade, yarnColour } from './colour.ts';
+import { shapeSpans } from './shape-spans.ts';
+
+/** Warp that names no colour: undyed cotton. */
+const BARE_WARP = '#d8d2c1';
+const UNKNOWN_COVER = 0.7;
+
+/** `plan` must be the plan of `piece`; a band the plan does not know is left out. */
+export function clothPieceOf(piece: Piece, plan: Plan, title: string): WovenPiece {
+  const plans = new Map(plan.bands.map((band) => [band.index, band]));
+  const bands = piece.bands.flatMap((band, index) => {
+    const planned = plans.get(index);
+    return planned === undefined ? [] : [bandOf(band, planned, index, piece, plan)];
+  });
+  return {
+    kind: 'woven',
+    title,
+    thing: 'wall hanging',
+    widthMm: piece.size.widthMm,
+    ends: plan.ends.working,
+    endsTogether: piece.warp.endsTogether ?? 1,
+    warpColour: piece.warp.yarn.colour === undefined ? BARE_WARP : yarnColour(piece.warp.yarn.colour),
+    seed: piece.seed ?? 7,
+    turned: piece.hangs === 'turned',
+    loom: {
+      insideWidthMm: piece.loom.insideWidthMm ?? plan.loom.insideWidthNeededMm,
+      insideHeightMm: piece.loom.insideHeightMm,
+      bottomMm: plan.loom.bottomMm,
+    },
+    bands,
+  };
+}
+
+interface NamedColour {
+  readonly colour: string;
+  readonly yarn: string;
+}
+
+/** A role's colour and its name in a word or two: the last part of its label, or the role itself. */
+function roleOf(role: string, piece: Piece): NamedColour {
+  const yarn: Yarn | undefined = Object.hasOwn(piece.yarns, role) ? piece.yarns[role] : undefined;
+  const label = yarn?.label?.split(',').at(-1)?.trim();
+  return { colour: yarn === undefined ? NEUTRAL : yarnColour(yarn.colour), yarn: label === undefined || label === '' ? role : label };
+}
+
+function bandOf(band: Band, planned: BandPlan, index: number, piece: Piece, plan: Plan): ClothBand {
+  const base = { name: band.name, heightMm: planned.heightMm, ...roleOf(band.yarn, piece) };
+  switch (band.technique) {
+    case 'tabby': {
+      const picks = planned.picks ?? Math.max(1, Math.round(planned.heightMm / plan.weft.pickSpacingMm));
+      const shapes = (band.shapes ?? []).map((shape): ClothShape => {
+        const grid = { spacingMm: plan.ends.spacingMm, pickSpacingMm: planned.heightMm / picks, ends: plan.ends.working, picks };
+        return { ...roleOf(shape.yarn, piece), spans: shapeSpans(shape, grid) };
+      });
+      return { ...base, technique: 'tabby', picks, cover: coverOf(piece.yarns[band.yarn], planned.heightMm / picks), shapes };
+    }
+    case 'soumak':
+      return {
+        ...base,
+        technique: 'soumak',
+        rows: band.rows,
+        over: band.over,
+        back: band.back,
+        tabbyBetween: band.tabbyBetween,
+        tabbyColour: roleOf(band.tabbyYarn, piece).colour,
+        soumakShare: soumakShare(band.rows, band.tabbyBetween, planned.heightMm, plan.weft.pickSpacingMm),
+      };
+    case 'rya':
+      return { ...base, technique: 'rya', rows: band.rows, knotEnds: 2 * band.legEnds, strands: band.strands, pileMm: band.pileMm, groundColour: groundOf(index, piece) };
+    case 'roving':
+      return { ...base, technique: 'roving', over: band.over, passes: band.passes ?? 1 };
+    case 'loop-pile':
+      return { ...base, technique: 'loop-pile', rows: band.rows, loopMm: band.loopMm ?? (Math.PI * (band.rodMm ?? 0)) / 2, groundColour: groundOf(index, piece) };
+    case 'twining':
+      return { ...base, technique: 'twining', rows: band.rows };
+    case 'hem-stitch':
+      return { ...base, technique: 'hem-stitch', heightMm: 0, bundleEnds: band.bundleEnds, reachMm: band.reachPicks * plan.weft.pickSpacingMm };
+  }
+}
+
+/** Share of a soumak band that the plain picks between its rows leave to the soumak. */
+function soumakShare(rows: number, between: number, heightMm: number, pickSpacingMm: number): number {
+  if (heightMm <= 0) return 1;
+  const plain = Math.max(0, rows - 1) * between * pickSpacingMm;
+  return Math.min(1, Math.max(0.4, 1 - plain / heightMm));
+}
+
+/** Pile stands on the tabby it is woven into: that of the nearest tabby band, before or after it. */
+function groundOf(index: number, piece: Piece): string {
+  for (let step = 1; step < piece.bands.length; step++) {
+    for (const near of [piece.bands[index - step], piece.bands[index + step]]) {
+      if (near?.technique === 'tabby') return roleOf(near.yarn, piece).colour;
+    }
+  }
+  const own = piece.bands[index];
+  return own === undefined ? NEUTRAL : mix(roleOf(own.yarn, piece).colour, shade(NEUTRAL, 0.3), 0.25);
+}
+
+/**
+ * How far the weft hides the warp: from the thickness of the yarn as it lies free, against the room of a row.
+ * A yarn that was not measured counts as {@link UNKNOWN_COVER}.
+ */
+function coverOf(yarn: Yarn | undefined, pickSpacingMm: number): number {
+  if (yarn?.wrapsPerInch === undefined || pickSpacingMm <= 0) return UNKNOWN_COVER;
+  const diameterMm = (25.4 / yarn.wrapsPerInch) * Math.sqrt(yarn.strands ?? 1);
+  return Math.max(0, Math.min(1, (diameterMm / pickSpacingMm - 0.6) / 0.6));
+}

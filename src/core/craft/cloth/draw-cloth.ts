@@ -1,0 +1,198 @@
+/**
+ * A piece as woven structure, drawn from its own data as an SVG string.
+ *
+ * Pure and repeatable: the same piece and view give the same cloth, on the server and in the browser. No `style`
+ * attributes and no scripts; the markup holds nothing that a person typed but escaped words and checked colours.
+ */
+import { coloursOf } from './bands/draw-band.ts';
+import { ryaFall } from './bands/rya.ts';
+import { chanceFrom } from './chance.ts';
+import type { ClothPiece, CordPiece, WovenPiece } from './cloth-piece.ts';
+import { wovenHeightMm } from './cloth-piece.ts';
+import { checkView, detailOf } from './cloth-view.ts';
+import type { ClothView } from './cloth-view.ts';
+import { drawCords } from './cords.ts';
+import { describeCloth } from './describe-cloth.ts';
+import { drawEnds } from './ends.ts';
+import { drawFellLine } from './fell-line.ts';
+import { drawCastShadow, drawDowel } from './hanging.ts';
+import { layBands } from './lay-bands.ts';
+import type { DrawnBands } from './lay-bands.ts';
+import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from './loom-frame.ts';
+import { PathStore, escapeWords, num } from './markup.ts';
+import { drawPlies } from './ply.ts';
+import type { Weave } from './weave.ts';
+
+interface Picture {
+  readonly width: number;
+  readonly height: number;
+  readonly body: string;
+  readonly defs: string;
+}
+
+/** Throws `RangeError` for a view that cannot be drawn (no id, no width); never for what a piece holds. */
+export function drawCloth(piece: ClothPiece, view: ClothView): string {
+  checkView(view);
+  const picture = piece.kind === 'cords' ? hangCords(piece, view) : drawWoven(piece, view);
+  return wrap(picture, piece, view);
+}
+
+function drawWoven(piece: WovenPiece, view: ClothView): Picture {
+  if (view.as === 'hanging') return hang(piece, view);
+  if (view.as === 'loom') return onLoom(piece, view);
+  return lay(piece, view);
+}
+
+/** Room for what pile may hang below a band in this view. */
+function pileRoom(view: ClothView): (bandHeight: number) => number {
+  const kept = view.as === 'strip' || view.as === 'lying';
+  return (bandHeight) => (kept ? bandHeight * 0.72 : Number.POSITIVE_INFINITY);
+}
+
+function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
+  const { minEnd, minPick } = detailOf(view);
+  const pxPerMm = view.pxPerMm ?? width / piece.widthMm;
+  /* A picture that shows only part of the width shows that part of the ends. */
+  const real = Math.max(4, Math.round(piece.ends * Math.min(1, width / pxPerMm / piece.widthMm)));
+  const fitting = Math.max(4, Math.min(real, Math.floor(width / minEnd)));
+  const ends = fitting - (fitting % 2);
+  const end = width / ends;
+  return {
+    id: view.id,
+    width,
+    end,
+    ends,
+    grouped: Math.max(1, real / ends),
+    pxPerMm,
+    minPick,
+    begin: beginOf(piece, view),
+    endsTogether: piece.endsTogether,
+    plied: minPick >= 9,
+    warpColour: piece.warpColour,
+    warpWidth: Math.min(end * 0.4, 9),
+    paths: new PathStore(view.id),
+    chance: chanceFrom(piece.seed),
+    longestPile: pileRoom(view),
+  };
+}
+
+function beginOf(piece: WovenPiece, view: ClothView): 'head' | 'foot' {
+  if (view.begin !== undefined) return view.begin;
+  const stripped = view.as === 'strip' || view.as === 'lying';
+  return stripped || (view.as === 'hanging' && piece.turned) ? 'head' : 'foot';
+}
+
+function wovenShare(view: ClothView): number {
+  return Math.max(0, Math.min(1, view.woven ?? 1));
+}
+
+function defsOf(piece: WovenPiece, weave: Weave, clip: string): string {
+  const plies = weave.plied ? drawPlies(piece.bands.flatMap(coloursOf), weave.minPick * 1.1, weave.id) : '';
+  return plies + clip + weave.paths.defs();
+}
+
+function hang(piece: WovenPiece, view: ClothView): Picture {
+  const inset = Math.max(6, view.width * 0.03);
+  const weave = weaveOf(piece, view, view.width - 2 * inset);
+  const top = Math.max(16, view.width * 0.13);
+  const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
+  const at = top + 3;
+  const body =
+    drawCastShadow(inset, top, weave.width, bands.height) +
+    drawDowel(view.width, inset * 0.1, top) +
+    `<g transform="translate(${num(inset)} 0)">${drawEnds(top * 0.8, top + 4, weave)}</g>` +
+    `<g transform="translate(${num(inset)} ${num(at)})">${bands.markup}</g>`;
+  return { width: view.width, height: at + bands.height + pileBelow(piece, bands, weave) + 6, body, defs: defsOf(piece, weave, bands.clip) };
+}
+
+/** How far the longest pile falls below the lower edge of the cloth. */
+function pileBelow(piece: WovenPiece, bands: DrawnBands, weave: Weave): number {
+  let at = 0;
+  let deepest = 0;
+  for (const band of piece.bands) {
+    const height = band.heightMm * weave.pxPerMm;
+    const foot = weave.begin === 'head' ? at + height : bands.height - at;
+    if (band.technique === 'rya') deepest = Math.max(deepest, foot - height / band.rows + ryaFall(band, height / band.rows, weave) * 1.04 - bands.height);
+    at += height;
+  }
+  return deepest;
+}
+
+function onLoom(piece: WovenPiece, view: ClothView): Picture {
+  const rail = view.width * 0.05;
+  const loom = piece.loom;
+  const scale = loom === undefined ? (view.width * 0.83) / piece.widthMm : (view.width - 2 * rail) / loom.insideWidthMm;
+  const inset = (view.width - piece.widthMm * scale) / 2;
+  const weave = weaveOf(piece, view, view.width - 2 * inset);
+  const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
+  const nailsTop = rail * 0.7;
+  const below = (loom?.bottomMm ?? 30) * weave.pxPerMm;
+  const span = loom === undefined ? bands.height * 1.32 + below : Math.max(loom.insideHeightMm * weave.pxPerMm, bands.height + below * 1.5);
+  const nailsBottom = nailsTop + span;
+  const clothTop = weave.begin === 'foot' ? nailsBottom - below - bands.height : nailsTop + below;
+  const cloth = `<g transform="translate(0 ${num(clothTop)})">${bands.markup}${atFell(piece, bands, view, weave, inset)}</g>`;
+  const card = weave.begin === 'foot' && below > 8 ? drawSpacerCard(nailsBottom - below, below * 0.8, weave) : '';
+  const frame = nailsBottom + rail * 0.7;
+  const height = Math.max(frame, clothTop + bands.height + pileBelow(piece, bands, weave) + 2);
+  const body =
+    drawFrame(view.width, frame, rail) +
+    `<g transform="translate(${num(inset)} 0)">${drawWarpOnNails(nailsTop, nailsBottom, weave)}${card}${cloth}</g>`;
+  return { width: view.width, height, body, defs: defsOf(piece, weave, bands.clip) };
+}
+
+function atFell(piece: WovenPiece, bands: DrawnBands, view: ClothView, weave: Weave, inset: number): string {
+  const woven = wovenShare(view);
+  if (woven >= 1) return '';
+  const shuttle = woven > 0 ? drawShuttle(bands.fell, bandAt(piece, woven)?.colour ?? piece.warpColour, weave) : '';
+  if (view.fell === false) return shuttle;
+  return shuttle + drawFellLine(weave.width, bands.fell, view.fellOut ?? Math.min(inset * 0.55, 26), view.width > 200 ? 4 : 3);
+}
+
+function bandAt(piece: WovenPiece, woven: number): WovenPiece['bands'][number] | undefined {
+  const reached = woven * wovenHeightMm(piece);
+  let at = 0;
+  return piece.bands.find((band) => {
+    at += band.heightMm;
+    return band.heightMm > 0 && at >= reached - 0.01;
+  });
+}
+
+/** The bare cloth: strips and swatches. */
+function lay(piece: WovenPiece, view: ClothView): Picture {
+  const pad = view.pad ?? (view.as === 'swatch' ? 0 : 3);
+  const weave = weaveOf(piece, view, view.width - 2 * pad);
+  const total = Math.max(1, wovenHeightMm(piece));
+  const height = view.height ?? total * weave.pxPerMm;
+  const bands = layBands(piece, height / total, wovenShare(view), weave);
+  const open = view.openWarp === false ? '' : weave.begin === 'head' ? drawEnds(bands.fell, height, weave) : drawEnds(0, bands.fell, weave);
+  const unfinished = (view.woven ?? 1) < 1 && view.fell !== false;
+  const fell = unfinished ? drawFellLine(weave.width, bands.fell, view.fellOut ?? 3, weave.width > 200 ? 5 : 3) : '';
+  const inner = open + bands.markup + fell;
+  const body = pad > 0 ? `<g transform="translate(${num(pad)} 0)">${inner}</g>` : inner;
+  return { width: view.width, height, body, defs: defsOf(piece, weave, bands.clip) };
+}
+
+function hangCords(piece: CordPiece, view: ClothView): Picture {
+  const inset = Math.max(6, view.width * 0.03);
+  const scale = view.pxPerMm ?? (view.width - 2 * inset) / piece.widthMm;
+  const top = Math.max(14, view.width * 0.12);
+  const height = view.height ?? piece.lengthMm * scale;
+  const paths = new PathStore(view.id);
+  const cords = drawCords(piece, view.width - 2 * inset, height, scale, paths);
+  const body = drawDowel(view.width, inset * 0.1, top) + `<g transform="translate(${num(inset)} ${num(top)})">${cords}</g>`;
+  return { width: view.width, height: height + top, body, defs: paths.defs() };
+}
+
+function wrap(picture: Picture, piece: ClothPiece, view: ClothView): string {
+  const lying = view.as === 'lying';
+  const width = num(lying ? picture.height : picture.width);
+  const height = num(lying ? picture.width : picture.height);
+  const body = lying ? `<g transform="translate(0 ${num(picture.width)}) rotate(-90)">${picture.body}</g>` : picture.body;
+  const stretch = view.as === 'strip' || lying ? ' preserveAspectRatio="none"' : '';
+  const words = view.decorative === true ? ' aria-hidden="true"' : ` role="img" aria-label="${escapeWords(view.label ?? describeCloth(piece, view))}"`;
+  const defs = picture.defs === '' ? '' : `<defs>${picture.defs}</defs>`;
+  return (
+    `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${width} ${height}" width="${width}" height="${height}" fill="none"${stretch}${words}>` +
+    `${defs}${body}</svg>`
+  );
+}

@@ -1,0 +1,38 @@
+/** The warp: all ends of a stretch are one line as thick as the stretch is high, dashed once for each end. */
+import { light, shade } from './colour.ts';
+import { dashes, num } from './markup.ts';
+import type { Weave } from './weave.ts';
+
+/** Ends narrower than this cannot show that there are two of them. */
+const DOUBLED_FROM = 6;
+
+/** Ends from `top` to `bottom` over the whole width, or between `x0` and `x1` (multiples of one end). */
+export function drawEnds(top: number, bottom: number, weave: Weave, x0 = 0, x1 = weave.width): string {
+  const height = bottom - top;
+  if (height <= 0) return '';
+  const d = `M${num(x0)} ${num(top + height / 2)}H${num(x1)}`;
+  if (weave.endsTogether === 2 && weave.end >= DOUBLED_FROM) return drawDoubled(d, height, weave);
+  const { warpColour, warpWidth: width, paths } = weave;
+  let drawn = paths.stroke(d, shade(warpColour, 0.45), height, eachEnd(weave, width, 0));
+  drawn += paths.stroke(d, warpColour, height, eachEnd(weave, width * 0.68, -width * 0.08));
+  if (width > 1.8) drawn += paths.stroke(d, light(warpColour, 0.6), height, eachEnd(weave, width * 0.2, -width * 0.16));
+  return drawn;
+}
+
+function drawDoubled(d: string, height: number, weave: Weave): string {
+  const { warpColour, warpWidth: width, paths } = weave;
+  return [-1, 1]
+    .map((side) => {
+      const off = side * width * 0.31;
+      return (
+        paths.stroke(d, shade(warpColour, 0.45), height, eachEnd(weave, width * 0.56, off)) +
+        paths.stroke(d, light(warpColour, 0.1), height, eachEnd(weave, width * 0.34, off - width * 0.06))
+      );
+    })
+    .join('');
+}
+
+/** A dash `width` px wide on each end, `off` px beside its middle. */
+export function eachEnd(weave: Weave, width: number, off: number): string {
+  return dashes(width, weave.end - width, weave.end / 2 - width / 2 + off);
+}

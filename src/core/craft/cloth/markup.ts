@@ -1,0 +1,72 @@
+/**
+ * The few pieces of SVG text that every drawing is made of.
+ *
+ * A woven picture has thousands of crossings. It stays small because one path carries many threads, numbers keep one
+ * decimal, and a path that is drawn more than once (shadow, body, light) is kept once and re-used.
+ */
+
+/** One decimal, without a leading zero: `-0.25` becomes `-.3`. */
+export function num(value: number): string {
+  return short(Math.round(value * 10) / 10);
+}
+
+/** Two decimals, for dashes, where a tenth of a pixel adds up over a hundred ends. */
+export function fine(value: number): string {
+  return short(Math.round(value * 100) / 100);
+}
+
+function short(value: number): string {
+  return String(value === 0 ? 0 : value).replace(/^(-?)0\./, '$1.');
+}
+
+/** Words of a person, made safe to stand in markup or in an attribute. */
+export function escapeWords(words: string): string {
+  return words.replace(/[&<>"'`]/g, (sign) => `&#${sign.charCodeAt(0)};`);
+}
+
+export const ROUND = ' stroke-linecap="round"';
+
+/** A dash pattern that begins `start` px into the line. */
+export function dashes(on: number, off: number, start: number): string {
+  return ` stroke-dasharray="${fine(on)} ${fine(off)}" stroke-dashoffset="${fine(-start)}"`;
+}
+
+export function moved(x: number, y: number): string {
+  return ` transform="translate(${num(x)} ${num(y)})"`;
+}
+
+export function box(x: number, y: number, width: number, height: number, fill: string): string {
+  return `<path d="M${num(x)} ${num(y)}h${num(width)}v${num(height)}h${num(-width)}z" fill="${fill}"/>`;
+}
+
+/** A path shorter than this costs less written twice than kept. */
+const WORTH_KEEPING = 90;
+
+/** Strokes paths and keeps the long ones in `defs`, under ids that begin with `prefix`. */
+export class PathStore {
+  readonly #prefix: string;
+  readonly #kept = new Map<string, string>();
+
+  constructor(prefix: string) {
+    this.#prefix = prefix;
+  }
+
+  stroke(d: string, colour: string, width: number, more = ''): string {
+    if (d === '') return '';
+    const look = ` stroke="${colour}" stroke-width="${num(width)}"${more}`;
+    if (d.length < WORTH_KEEPING) return `<path d="${d}"${look}/>`;
+    let id = this.#kept.get(d);
+    if (id === undefined) {
+      id = `${this.#prefix}-${this.#kept.size.toString(36)}`;
+      this.#kept.set(d, id);
+    }
+    return `<use href="#${id}"${look}/>`;
+  }
+
+  /** What `defs` must hold for the strokes drawn so far. */
+  defs(): string {
+    let all = '';
+    for (const [d, id] of this.#kept) all += `<path id="${id}" d="${d}"/>`;
+    return all;
+  }
+}

@@ -1,0 +1,28 @@
+import { describe, expect, it } from 'vitest';
+import { describeCloth } from '#core/craft/cloth/describe-cloth.ts';
+import { CORDS, RYA, SOUMAK, WEDGES, wovenPiece } from './pieces.ts';
+
+describe('a cloth in words', () => {
+  const piece = wovenPiece({ bands: [RYA, WEDGES, SOUMAK] });
+
+  it('names the piece, its width, and its bands in the order they are woven', () => {
+    expect(describeCloth(piece)).toBe(
+      'Low Tide, wall hanging, 40 cm wide. In the order it is woven: a rya fringe in Foam, 14 cm long, ' +
+        '16 cm of wedges in Slack Water and Dry Sand, 12 rows of soumak in Estuary.',
+    );
+  });
+
+  it('says how far it is, with the row of the band at the fell', () => {
+    expect(describeCloth(piece, { woven: (24 + 80) / 244 })).toContain(' Woven so far: 10.4 cm of 24.4 cm, row 48 of 96 in the wedges.');
+    expect(describeCloth(piece, { woven: 0 })).toContain(' Nothing woven yet, of 24.4 cm.');
+    expect(describeCloth(piece, { woven: 1 })).not.toContain('Woven so far');
+  });
+
+  it('speaks in inches with fractions when asked', () => {
+    expect(describeCloth(piece, { units: 'in' })).toContain('15 3/4 in wide');
+  });
+
+  it('counts cords', () => {
+    expect(describeCloth(CORDS)).toBe('Three Knotted Cords, plant hanger, 76 cm long: 3 knotted cords.');
+  });
+});
