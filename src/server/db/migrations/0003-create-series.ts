@@ -1,0 +1,82 @@
+import { sql, type Migration } from '#server/db/migration.ts';
+
+export const createSeries: Migration = {
+  name: '0003-create-series',
+  statements: [
+    `CREATE TABLE IF NOT EXISTS series (
+      ${sql.id}, ${sql.publicId},
+      workroom_id INT UNSIGNED NOT NULL,
+      slug ${sql.outside(64)} NOT NULL,
+      title VARCHAR(120) NOT NULL,
+      craft ENUM('frame-loom','macrame') NOT NULL DEFAULT 'frame-loom',
+      level ENUM('first-piece','some-practice','sure-hand') NOT NULL DEFAULT 'first-piece',
+      summary VARCHAR(400) NOT NULL DEFAULT '',
+      story TEXT NOT NULL DEFAULT '',
+      techniques JSON NOT NULL DEFAULT '[]',
+      price_minor BIGINT NULL CHECK (price_minor BETWEEN 0 AND 9007199254740991),
+      currency CHAR(3) NOT NULL DEFAULT 'EUR',
+      state ENUM('draft','published') NOT NULL DEFAULT 'draft',
+      published_at DATETIME(3) NULL,
+      revision INT UNSIGNED NOT NULL DEFAULT 0,
+      ${sql.stamps},
+      UNIQUE KEY uq_series_public_id (public_id),
+      UNIQUE KEY uq_series_slug (slug),
+      KEY ix_series_state (state, published_at),
+      CONSTRAINT fk_series_workroom FOREIGN KEY (workroom_id) REFERENCES workrooms (id)
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS pieces (
+      series_id INT UNSIGNED NOT NULL PRIMARY KEY,
+      data JSON NOT NULL,
+      revision INT UNSIGNED NOT NULL DEFAULT 0,
+      ${sql.stamps},
+      CONSTRAINT fk_pieces_series FOREIGN KEY (series_id) REFERENCES series (id) ON DELETE CASCADE
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS lessons (
+      ${sql.id}, ${sql.publicId},
+      series_id INT UNSIGNED NOT NULL,
+      position INT UNSIGNED NOT NULL,
+      title VARCHAR(120) NOT NULL,
+      minutes INT UNSIGNED NOT NULL DEFAULT 30,
+      is_preview TINYINT(1) NOT NULL DEFAULT 0,
+      opens JSON NOT NULL,
+      opens_at DATETIME(3) NULL,
+      checkpoint JSON NULL,
+      draft_source MEDIUMTEXT NOT NULL DEFAULT '',
+      draft_revision INT UNSIGNED NOT NULL DEFAULT 0,
+      published_version_id INT UNSIGNED NULL,
+      taken_out_at DATETIME(3) NULL,
+      ${sql.stamps},
+      UNIQUE KEY uq_lessons_public_id (public_id),
+      KEY ix_lessons_series_position (series_id, position),
+      CONSTRAINT fk_lessons_series FOREIGN KEY (series_id) REFERENCES series (id) ON DELETE CASCADE
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS lesson_versions (
+      ${sql.id},
+      lesson_id INT UNSIGNED NOT NULL,
+      number INT UNSIGNED NOT NULL,
+      source MEDIUMTEXT NOT NULL,
+      tree JSON NOT NULL,
+      author_id INT UNSIGNED NULL,
+      ${sql.born},
+      UNIQUE KEY uq_lesson_versions_lesson_number (lesson_id, number),
+      CONSTRAINT fk_lesson_versions_lesson FOREIGN KEY (lesson_id) REFERENCES lessons (id) ON DELETE CASCADE,
+      CONSTRAINT fk_lesson_versions_author FOREIGN KEY (author_id) REFERENCES users (id)
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS gathering_items (
+      ${sql.id}, ${sql.publicId},
+      lesson_id INT UNSIGNED NOT NULL,
+      position INT UNSIGNED NOT NULL,
+      kind ENUM('tool','yarn','material') NOT NULL,
+      name VARCHAR(120) NOT NULL,
+      amount_key VARCHAR(80) NULL,
+      amount_text VARCHAR(80) NULL,
+      stand_in VARCHAR(200) NULL,
+      until_part INT UNSIGNED NULL,
+      note VARCHAR(300) NULL,
+      ${sql.stamps},
+      UNIQUE KEY uq_gathering_items_public_id (public_id),
+      KEY ix_gathering_items_lesson_position (lesson_id, position),
+      CONSTRAINT fk_gathering_items_lesson FOREIGN KEY (lesson_id) REFERENCES lessons (id) ON DELETE CASCADE
+    ) ${sql.end}`,
+  ],
+};

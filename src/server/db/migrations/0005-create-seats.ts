@@ -1,0 +1,80 @@
+import { sql, type Migration } from '#server/db/migration.ts';
+
+export const createSeats: Migration = {
+  name: '0005-create-seats',
+  statements: [
+    `CREATE TABLE IF NOT EXISTS orders (
+      ${sql.id}, ${sql.publicId},
+      user_id INT UNSIGNED NOT NULL,
+      series_id INT UNSIGNED NOT NULL,
+      state ENUM('pending','paid','expired','review') NOT NULL DEFAULT 'pending',
+      ${sql.money('amount_minor')},
+      currency CHAR(3) NOT NULL,
+      attempt INT UNSIGNED NOT NULL DEFAULT 1,
+      checkout_parameters JSON NOT NULL,
+      session_id ${sql.outside(255)} NULL,
+      pay_url TEXT NULL,
+      payment_intent_id ${sql.outside(255)} NULL,
+      terms JSON NOT NULL,
+      receipt_number INT UNSIGNED NULL,
+      expires_at DATETIME(3) NOT NULL,
+      paid_at DATETIME(3) NULL,
+      review_reason VARCHAR(200) NULL,
+      ${sql.stamps},
+      UNIQUE KEY uq_orders_public_id (public_id),
+      UNIQUE KEY uq_orders_session_id (session_id),
+      UNIQUE KEY uq_orders_receipt_number (receipt_number),
+      KEY ix_orders_user_series (user_id, series_id, state),
+      KEY ix_orders_state (state, created_at),
+      CONSTRAINT fk_orders_user FOREIGN KEY (user_id) REFERENCES users (id),
+      CONSTRAINT fk_orders_series FOREIGN KEY (series_id) REFERENCES series (id)
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS receipt_counters (
+      id TINYINT UNSIGNED NOT NULL PRIMARY KEY,
+      last_number INT UNSIGNED NOT NULL
+    ) ${sql.end}`,
+    'INSERT IGNORE INTO receipt_counters (id, last_number) VALUES (1, 0)',
+    `CREATE TABLE IF NOT EXISTS enrolments (
+      ${sql.id}, ${sql.publicId},
+      user_id INT UNSIGNED NOT NULL,
+      series_id INT UNSIGNED NOT NULL,
+      order_id INT UNSIGNED NULL,
+      source ENUM('bought','gift','granted') NOT NULL,
+      state ENUM('active','closed') NOT NULL DEFAULT 'active',
+      started_at DATETIME(3) NOT NULL,
+      ${sql.stamps},
+      UNIQUE KEY uq_enrolments_public_id (public_id),
+      UNIQUE KEY uq_enrolments_user_series (user_id, series_id),
+      KEY ix_enrolments_series_state (series_id, state),
+      CONSTRAINT fk_enrolments_user FOREIGN KEY (user_id) REFERENCES users (id),
+      CONSTRAINT fk_enrolments_series FOREIGN KEY (series_id) REFERENCES series (id),
+      CONSTRAINT fk_enrolments_order FOREIGN KEY (order_id) REFERENCES orders (id)
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS payment_events (
+      id ${sql.outside(255)} NOT NULL PRIMARY KEY,
+      type VARCHAR(80) NOT NULL,
+      api_version VARCHAR(40) NOT NULL,
+      is_live TINYINT(1) NOT NULL,
+      object_id ${sql.outside(255)} NOT NULL,
+      payload JSON NOT NULL,
+      handled_at DATETIME(3) NULL,
+      outcome VARCHAR(80) NULL,
+      ${sql.born},
+      KEY ix_payment_events_handled (handled_at, created_at)
+    ) ${sql.end}`,
+    `CREATE TABLE IF NOT EXISTS ledger_entries (
+      ${sql.id},
+      order_id INT UNSIGNED NOT NULL,
+      workroom_id INT UNSIGNED NOT NULL,
+      kind ENUM('sale','fee','refund','fee-refund') NOT NULL,
+      ${sql.money('amount_minor')},
+      currency CHAR(3) NOT NULL,
+      external_id ${sql.outside(255)} NOT NULL,
+      ${sql.born},
+      UNIQUE KEY uq_ledger_entries_kind_external (kind, external_id),
+      KEY ix_ledger_entries_workroom (workroom_id, created_at),
+      CONSTRAINT fk_ledger_entries_order FOREIGN KEY (order_id) REFERENCES orders (id),
+      CONSTRAINT fk_ledger_entries_workroom FOREIGN KEY (workroom_id) REFERENCES workrooms (id)
+    ) ${sql.end}`,
+  ],
+};

@@ -1,0 +1,19 @@
+/** Every step of the schema, oldest first. A static list, so that bundles carry them all. */
+import type { Migration } from '#server/db/migration.ts';
+import { createPeople } from './0001-create-people.ts';
+import { createWorkrooms } from './0002-create-workrooms.ts';
+import { createSeries } from './0003-create-series.ts';
+import { createMedia } from './0004-create-media.ts';
+import { createSeats } from './0005-create-seats.ts';
+import { createProgress } from './0006-create-progress.ts';
+import { createQueues } from './0007-create-queues.ts';
+
+export const migrations: readonly Migration[] = [
+  createPeople,
+  createWorkrooms,
+  createSeries,
+  createMedia,
+  createSeats,
+  createProgress,
+  createQueues,
+];

@@ -1,0 +1,65 @@
+/**
+ * The one connection pool of a process. Made lazily in the sense that nothing is read or opened until the first query:
+ * the address is asked for by `beforeConnect`, so that a build or a prerendered page needs no database.
+ */
+import * as mariadb from 'mariadb';
+import { Sequelize } from 'sequelize';
+import { config } from '#server/config.ts';
+import { transactionScope } from '#server/db/transaction-scope.ts';
+
+interface RawConnection {
+  query(...args: readonly unknown[]): Promise<unknown>;
+}
+
+/**
+ * The connector marks `meta` on its result rows as undeletable, and Sequelize 6 deletes it.
+ * A plain copy with an ordinary `meta` serves both; checked in tests/server/db/driver-contract.test.ts.
+ */
+function withDeletableMeta(connection: RawConnection): RawConnection {
+  const query = connection.query.bind(connection);
+  connection.query = async (...args) => {
+    const rows = await query(...args);
+    return Array.isArray(rows) && 'meta' in rows ? Object.assign([...rows], { meta: rows.meta }) : rows;
+  };
+  return connection;
+}
+
+const dialectModule = {
+  ...mariadb,
+  createConnection: async (options: mariadb.ConnectionConfig) =>
+    withDeletableMeta((await mariadb.createConnection(options)) as unknown as RawConnection),
+};
+
+/** Listeners told the text of every statement; tests count statements by them. */
+export const statementListeners = new Set<(sql: string) => void>();
+
+function open(): Sequelize {
+  Sequelize.useCLS(transactionScope);
+  const sequelize = new Sequelize({
+    dialect: 'mariadb',
+    dialectModule,
+    timezone: '+00:00',
+    pool: { max: 10, min: 0, acquire: 4_000, idle: 30_000 },
+    logging: (sql) => { for (const listener of statementListeners) listener(sql); },
+    define: { underscored: true, charset: 'utf8mb4' },
+    dialectOptions: {
+      // Refuses what the columns cannot hold instead of cutting it off, and never lets a forgotten query hold a row for long.
+      initSql: ["SET SESSION sql_mode='STRICT_ALL_TABLES,ONLY_FULL_GROUP_BY,NO_ENGINE_SUBSTITUTION', innodb_lock_wait_timeout=5, transaction_isolation='READ-COMMITTED'"],
+      // Result rows keep their numbers: identifiers stay below 2^53 by column type.
+      insertIdAsNumber: true,
+      bigIntAsNumber: true,
+      checkNumberRange: true,
+    },
+  });
+  sequelize.addHook('beforeConnect', (options) => {
+    const { host, port, user, password, name, socket } = config().database;
+    Object.assign(options, { host, port, username: user, password, database: name });
+    if (socket !== undefined) options.dialectOptions = { ...options.dialectOptions, socketPath: socket };
+  });
+  return sequelize;
+}
+
+// The development server loads server modules anew after an edit; the pool must survive that.
+const KEY = Symbol.for('fellmark.sequelize');
+const shared = globalThis as typeof globalThis & { [KEY]?: Sequelize };
+export const sequelize: Sequelize = (shared[KEY] ??= open());

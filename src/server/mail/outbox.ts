@@ -1,0 +1,34 @@
+/** Writes a letter into the outbox; part of the caller's transaction. The worker sends it. */
+import { UniqueConstraintError } from 'sequelize';
+import { Mail } from '#server/models/index.ts';
+import type { TemplateData, TemplateName } from '#server/mail/templates/index.ts';
+
+export interface Letter<T extends TemplateName> {
+  readonly template: T;
+  readonly data: TemplateData<T>;
+  readonly to: { readonly userId: number | null; readonly name: string; readonly address: string };
+  /** At most one letter with this key is ever written, e.g. `receipt:<order>`. */
+  readonly dedupeKey: string;
+  /** After this the letter is worthless and is not sent. */
+  readonly expiresAt?: Date;
+}
+
+/** @returns false when a letter with the same key was there already. */
+export async function postLetter<T extends TemplateName>(letter: Letter<T>): Promise<boolean> {
+  try {
+    await Mail.create({
+      dedupeKey: letter.dedupeKey,
+      template: letter.template,
+      userId: letter.to.userId,
+      toAddress: letter.to.address,
+      toName: letter.to.name,
+      data: letter.data,
+      expiresAt: letter.expiresAt ?? null,
+      runAt: new Date(),
+    });
+    return true;
+  } catch (error) {
+    if (error instanceof UniqueConstraintError) return false;
+    throw error;
+  }
+}

@@ -1,0 +1,30 @@
+import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
+import { id, maybeRef, moment, oneOf, publicId, ref } from '#server/db/columns.ts';
+import { sequelize } from '#server/db/sequelize.ts';
+
+/** A seat: the right of one person to one series. */
+export class Enrolment extends Model<InferAttributes<Enrolment>, InferCreationAttributes<Enrolment>> {
+  declare id: CreationOptional<number>;
+  declare publicId: CreationOptional<string>;
+  declare userId: number;
+  declare seriesId: number;
+  declare orderId: CreationOptional<number | null>;
+  declare source: 'bought' | 'gift' | 'granted';
+  declare state: CreationOptional<'active' | 'closed'>;
+  declare startedAt: Date;
+  declare createdAt: CreationOptional<Date>;
+  declare updatedAt: CreationOptional<Date>;
+}
+
+Enrolment.init({
+  id: id(),
+  publicId: publicId(),
+  userId: ref(),
+  seriesId: ref(),
+  orderId: maybeRef(),
+  source: oneOf(['bought', 'gift', 'granted']),
+  state: oneOf(['active', 'closed'], 'active'),
+  startedAt: moment(),
+  createdAt: moment(),
+  updatedAt: moment(),
+}, { sequelize, tableName: 'enrolments' });

@@ -1,0 +1,25 @@
+/** All tables. The only barrel of the house: a use-case that touches four tables names them in one line. */
+export { AuditEntry } from './audit-entry.ts';
+export { EmailToken } from './email-token.ts';
+export { Enrolment } from './enrolment.ts';
+export { GatheringItem } from './gathering-item.ts';
+export { Job } from './job.ts';
+export { LedgerEntry } from './ledger-entry.ts';
+export { Lesson } from './lesson.ts';
+export { LessonVersion } from './lesson-version.ts';
+export { LessonVisit } from './lesson-visit.ts';
+export { Mail } from './mail.ts';
+export { Media } from './media.ts';
+export { MyPieceRow } from './my-piece.ts';
+export { Order } from './order.ts';
+export { PatternPiece } from './piece.ts';
+export { PaymentEvent } from './payment-event.ts';
+export { PhotoNote } from './photo-note.ts';
+export { ProgressPhoto } from './progress-photo.ts';
+export { Series } from './series.ts';
+export { SeriesMedia } from './series-media.ts';
+export { Session } from './session.ts';
+export { Tick } from './tick.ts';
+export { User } from './user.ts';
+export { Workroom } from './workroom.ts';
+export { WorkroomHelper } from './workroom-helper.ts';
