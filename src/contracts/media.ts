@@ -1,0 +1,31 @@
+/** Files of people as data. */
+
+export interface MediaFile {
+  /** Where the file lies, relative to the uploads folder. */
+  readonly key: string;
+  readonly contentType: string;
+  readonly byteCount: number;
+  readonly width?: number;
+  readonly height?: number;
+}
+
+/** Renditions by name: photos have `large` and `thumb`; videos `video`, `captions` and `poster`. */
+export type MediaFiles = Readonly<Record<string, MediaFile>>;
+
+export interface Chapter {
+  readonly atMs: number;
+  readonly title: string;
+}
+
+export interface Cue {
+  readonly fromMs: number;
+  readonly toMs: number;
+  readonly words: string;
+}
+
+/** What is told of a file besides its bytes: `alt` of a picture, chapters and cues of a video. */
+export interface MediaDetail {
+  readonly alt?: string;
+  readonly chapters?: readonly Chapter[];
+  readonly cues?: readonly Cue[];
+}

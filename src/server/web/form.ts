@@ -1,0 +1,59 @@
+/**
+ * Forms that work without JavaScript: what was typed comes back with a sentence at each field that does not work yet.
+ * Astro's actions carry these answers; nothing here knows Astro.
+ */
+import type { z } from 'astro/zod';
+import { AppError } from '#server/errors.ts';
+
+export type TypedValues = Readonly<Record<string, string | readonly string[]>>;
+
+export type FormAnswer =
+  /** Done: go to `to`, where `said` is shown once. */
+  | { readonly ok: true; readonly to: string; readonly said?: string }
+  /** Not yet: `fields` by name, `summary` for what belongs to no field, `values` as they were typed. */
+  | { readonly ok: false; readonly summary: string; readonly fields: Readonly<Record<string, string>>; readonly values: TypedValues };
+
+/** Names whose values never come back to a page. */
+const SECRET = /password|secret|token|code$/i;
+
+/** Text fields of a form as typed; a name ending in `[]`, or one that occurs more than once, becomes a list. Files are left out. */
+export function typedValues(form: FormData): Record<string, string | string[]> {
+  const values: Record<string, string | string[]> = {};
+  for (const name of new Set(form.keys())) {
+    const texts = form.getAll(name).filter((value): value is string => typeof value === 'string');
+    if (name.endsWith('[]')) values[name.slice(0, -2)] = texts;
+    else if (texts.length === 1 && texts[0] !== undefined) values[name] = texts[0];
+    else if (texts.length > 1) values[name] = texts;
+  }
+  return values;
+}
+
+/** The first sentence for each field of a failed parse, by dotted path. */
+export function fieldSentences(error: z.ZodError): Record<string, string> {
+  const fields: Record<string, string> = {};
+  for (const issue of error.issues) {
+    const name = issue.path.join('.');
+    fields[name] ??= issue.message;
+  }
+  return fields;
+}
+
+/**
+ * Parses a form by `schema`, hands it to `work`, and turns refusals into an answer that keeps what was typed.
+ * Errors that no change of the form would cure (not found, forbidden, bugs) pass through.
+ */
+export async function answerForm<S extends z.ZodTypeAny>(schema: S, form: FormData, work: (input: z.output<S>) => Promise<{ to: string; said?: string }>): Promise<FormAnswer> {
+  const typed = typedValues(form);
+  const values = Object.fromEntries(Object.entries(typed).filter(([name]) => !SECRET.test(name)));
+  const parsed = schema.safeParse(typed);
+  if (!parsed.success) return { ok: false, summary: '', fields: fieldSentences(parsed.error), values };
+  try {
+    return { ok: true, ...(await work(parsed.data)) };
+  } catch (error) {
+    if (!(error instanceof AppError) || !FORM_CODES.has(error.code)) throw error;
+    const hasFields = Object.keys(error.fields).length > 0;
+    return { ok: false, summary: hasFields ? '' : error.says, fields: error.fields, values };
+  }
+}
+
+const FORM_CODES: ReadonlySet<string> = new Set(['VALIDATION', 'CONFLICT', 'GONE', 'RATE_LIMITED', 'UPSTREAM', 'UNAVAILABLE', 'TOO_LARGE', 'PAYMENT_REQUIRED']);

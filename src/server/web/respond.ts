@@ -1,0 +1,37 @@
+/** Answers of endpoints: JSON that is never cached, and problems by RFC 9457. */
+import { AppError } from '#server/errors.ts';
+
+export function json(body: unknown, status = 200, headers: Record<string, string> = {}): Response {
+  return new Response(JSON.stringify(body), { status, headers: { 'Content-Type': 'application/json; charset=utf-8', 'Cache-Control': 'private, no-store', ...headers } });
+}
+
+/** The problem document of an error. Unknown errors are logged once and say nothing of themselves. */
+export function problem(error: unknown, requestId: string): Response {
+  const known = error instanceof AppError ? error : new AppError('BUG', { cause: error });
+  if (known.code === 'BUG') console.error(JSON.stringify({ level: 'error', requestId, message: String(error instanceof Error ? error.stack : error) }));
+  const body = {
+    type: 'about:blank',
+    title: known.says,
+    status: known.status,
+    code: known.code,
+    requestId,
+    ...(Object.keys(known.fields).length === 0 ? {} : { fields: known.fields }),
+  };
+  return new Response(JSON.stringify(body), {
+    status: known.status,
+    headers: {
+      'Content-Type': 'application/problem+json; charset=utf-8',
+      'Cache-Control': 'private, no-store',
+      ...(known.retryAfterSeconds === undefined ? {} : { 'Retry-After': String(known.retryAfterSeconds) }),
+    },
+  });
+}
+
+/** Runs an endpoint's work and maps what it throws. */
+export async function answering(requestId: string, work: () => Promise<Response>): Promise<Response> {
+  try {
+    return await work();
+  } catch (error) {
+    return problem(error, requestId);
+  }
+}
