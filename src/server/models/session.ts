@@ -1,5 +1,5 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { moment, ref, text } from '#server/db/columns.ts';
+import { count, moment, ref, text } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /** A signed-in browser. `id` is the SHA-256 of the token in its cookie; `expiresAt` slides, `endsAt` does not; `provedAt` is when the password was last typed. */
@@ -8,6 +8,8 @@ export class Session extends Model<InferAttributes<Session>, InferCreationAttrib
   declare userId: number;
   declare expiresAt: Date;
   declare endsAt: Date;
+  /** How long the session lives without a request. */
+  declare idleSeconds: number;
   declare provedAt: Date;
   declare device: CreationOptional<string>;
   declare createdAt: CreationOptional<Date>;
@@ -18,6 +20,7 @@ Session.init({
   userId: ref(),
   expiresAt: moment(),
   endsAt: moment(),
+  idleSeconds: count(),
   provedAt: moment(),
   device: { ...text(160), defaultValue: '' },
   createdAt: moment(),

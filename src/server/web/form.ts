@@ -3,7 +3,7 @@
  * Astro's actions carry these answers; nothing here knows Astro.
  */
 import type { z } from 'astro/zod';
-import { AppError } from '#server/errors.ts';
+import { AppError, type ErrorCode } from '#server/errors.ts';
 
 export type TypedValues = Readonly<Record<string, string | readonly string[]>>;
 
@@ -11,7 +11,9 @@ export type FormAnswer =
   /** Done: go to `to`, where `said` is shown once. */
   | { readonly ok: true; readonly to: string; readonly said?: string }
   /** Not yet: `fields` by name, `summary` for what belongs to no field, `values` as they were typed. */
-  | { readonly ok: false; readonly summary: string; readonly fields: Readonly<Record<string, string>>; readonly values: TypedValues };
+  | { readonly ok: false; readonly summary: string; readonly fields: Readonly<Record<string, string>>; readonly values: TypedValues }
+  /** No change of the form would cure it. */
+  | { readonly ok: 'refused'; readonly code: ErrorCode; readonly says: string };
 
 /** Names whose values never come back to a page. */
 const SECRET = /password|secret|token|code$/i;
@@ -40,7 +42,7 @@ export function fieldSentences(error: z.ZodError): Record<string, string> {
 
 /**
  * Parses a form by `schema`, hands it to `work`, and turns refusals into an answer that keeps what was typed.
- * Errors that no change of the form would cure (not found, forbidden, bugs) pass through.
+ * Errors that no change of the form would cure (not found, forbidden) become `refused`; bugs pass through.
  */
 export async function answerForm<S extends z.ZodTypeAny>(schema: S, form: FormData, work: (input: z.output<S>) => Promise<{ to: string; said?: string }>): Promise<FormAnswer> {
   const typed = typedValues(form);
@@ -50,10 +52,40 @@ export async function answerForm<S extends z.ZodTypeAny>(schema: S, form: FormDa
   try {
     return { ok: true, ...(await work(parsed.data)) };
   } catch (error) {
-    if (!(error instanceof AppError) || !FORM_CODES.has(error.code)) throw error;
+    if (!(error instanceof AppError) || error.code === 'BUG') throw error;
+    if (!FORM_CODES.has(error.code)) return { ok: 'refused', code: error.code, says: error.says };
     const hasFields = Object.keys(error.fields).length > 0;
     return { ok: false, summary: hasFields ? '' : error.says, fields: error.fields, values };
   }
 }
 
 const FORM_CODES: ReadonlySet<string> = new Set(['VALIDATION', 'CONFLICT', 'GONE', 'RATE_LIMITED', 'UPSTREAM', 'UNAVAILABLE', 'TOO_LARGE', 'PAYMENT_REQUIRED']);
+
+export interface FormState {
+  readonly summary: string;
+  /** The sentences in order, for the list on top; empty before the form was sent. */
+  readonly problems: readonly { readonly field: string; readonly says: string }[];
+  /** What was typed, else `otherwise`. */
+  value(name: string, otherwise?: string): string;
+  values(name: string, otherwise?: readonly string[]): readonly string[];
+  error(name: string): string | undefined;
+}
+
+/** What a page needs to draw a form again: `data` is the answer of its action, or undefined when it was not sent. */
+export function formState(data: FormAnswer | undefined): FormState {
+  const failed = data?.ok === false ? data : undefined;
+  return {
+    summary: failed?.summary ?? '',
+    problems: Object.entries(failed?.fields ?? {}).map(([field, says]) => ({ field, says })),
+    value: (name, otherwise = '') => {
+      const value = failed?.values[name];
+      return failed === undefined || value === undefined ? otherwise : typeof value === 'string' ? value : (value[0] ?? '');
+    },
+    values: (name, otherwise = []) => {
+      if (failed === undefined) return otherwise;
+      const value = failed.values[name];
+      return value === undefined ? [] : typeof value === 'string' ? [value] : value;
+    },
+    error: (name) => failed?.fields[name],
+  };
+}

@@ -24,6 +24,7 @@ export const createPeople: Migration = {
       user_id INT UNSIGNED NOT NULL,
       expires_at DATETIME(3) NOT NULL,
       ends_at DATETIME(3) NOT NULL,
+      idle_seconds INT UNSIGNED NOT NULL,
       proved_at DATETIME(3) NOT NULL,
       device VARCHAR(160) NOT NULL DEFAULT '',
       ${sql.born},

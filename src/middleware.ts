@@ -1,0 +1,99 @@
+/**
+ * What every request passes before its page: who asks, from where, whether the route is theirs, the answer of a form.
+ * The order is the meaning: nothing reads a form of a person who may not send it.
+ */
+import { randomUUID } from 'node:crypto';
+import type { APIContext, MiddlewareNext } from 'astro';
+import { getActionContext } from 'astro:actions';
+import { defineMiddleware } from 'astro:middleware';
+import { actorOfToken, sessionCookie } from '#server/auth/sessions.ts';
+import { config } from '#server/config.ts';
+import { systemClock } from '#server/context.ts';
+import { AppError } from '#server/errors.ts';
+import { services } from '#server/services.ts';
+import type { FormAnswer } from '#server/web/form.ts';
+import { gate } from '#server/web/gate.ts';
+import { comesFromOwnPages, ownOrigins } from '#server/web/origin.ts';
+import { cacheRule, completePolicy } from '#server/web/page-headers.ts';
+import { problem } from '#server/web/respond.ts';
+import { ROUTE_RULES } from '#server/web/route-rules.ts';
+
+const SAID = 'said';
+
+export const onRequest = defineMiddleware(async (context, next) => {
+  if (context.isPrerendered) return next();
+  const { request, locals } = context;
+  const requestId = randomUUID();
+  const rule = ROUTE_RULES[context.routePattern];
+  const isApi = context.routePattern.startsWith('/api/');
+  try {
+    if (rule !== 'machine' && !comesFromOwnPages(request.method, request.headers, ownOrigins(config().publicUrl, config().demo))) {
+      throw new AppError('FORBIDDEN', { says: 'This form was sent from another site, so nothing was done. Open the page here and send it again.' });
+    }
+    const actor = rule === 'machine' ? null : await actorOfToken(context.cookies.get(sessionCookie().name)?.value);
+    locals.ctx = { actor, requestId, ip: context.clientAddress, clock: systemClock, services: services() };
+    locals.said = takeSaid(context);
+    const answer = gate(rule, actor);
+    if (answer === 'nothing-here') throw new AppError('NOT_FOUND');
+    if (answer === 'sign-in-first') throw new AppError('UNAUTHENTICATED');
+    if (answer === 'not-yours') throw new AppError('FORBIDDEN');
+    const response = (await answerFormAction(context, next)) ?? (await next());
+    return withHeaders(response, actor !== null);
+  } catch (error) {
+    return isApi ? problem(error, requestId) : pageForError(context, error, requestId);
+  }
+});
+
+/** A sentence left by the page before, shown once. */
+function takeSaid(context: APIContext): string | null {
+  const said = context.cookies.get(SAID)?.value ?? null;
+  if (said !== null && context.request.method === 'GET') context.cookies.delete(SAID, { path: '/' });
+  return said;
+}
+
+/**
+ * Runs a form's action here, so that success is a redirect (a reload never sends it twice) and a refusal draws the same
+ * page again. Returns null when the request is no form.
+ */
+async function answerFormAction(context: APIContext, next: MiddlewareNext): Promise<Response | null> {
+  const { action, setActionResult, serializeActionResult } = getActionContext(context);
+  if (action?.calledFrom !== 'form') return null;
+  const result = await action.handler();
+  const answer = result.data as FormAnswer | undefined;
+  if (answer === undefined) throw new AppError('BUG', { cause: result.error });
+  if (answer.ok === 'refused') throw new AppError(answer.code, { says: answer.says });
+  if (answer.ok) {
+    if (answer.said !== undefined) context.cookies.set(SAID, answer.said, { path: '/', httpOnly: true, sameSite: 'lax', secure: config().secureCookies, maxAge: 60 });
+    return context.redirect(answer.to, 303);
+  }
+  setActionResult(action.name, serializeActionResult(result));
+  const page = await next();
+  return page.status === 200 ? new Response(page.body, { status: 422, headers: page.headers }) : page;
+}
+
+function withHeaders(response: Response, signedIn: boolean): Response {
+  const { payments, publicUrl } = config();
+  const payOrigin = payments.url === undefined ? 'https://checkout.stripe.com' : new URL(payments.url, publicUrl).origin;
+  const policy = completePolicy(response.headers.get('content-security-policy'), payOrigin);
+  if (policy !== null) response.headers.set('content-security-policy', policy);
+  if (!response.headers.has('cache-control')) response.headers.set('cache-control', cacheRule(signedIn));
+  return response;
+}
+
+async function pageForError(context: APIContext, error: unknown, requestId: string): Promise<Response> {
+  const known = error instanceof AppError ? error : null;
+  if (known?.code === 'UNAUTHENTICATED') {
+    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : '/';
+    return context.redirect(`/sign-in?to=${encodeURIComponent(back)}`, 303);
+  }
+  // An empty 404 makes Astro show its 404 page.
+  if (known?.code === 'NOT_FOUND' || known?.code === 'GONE') return new Response(null, { status: 404 });
+  context.locals.refusal = { status: known?.status ?? 500, says: known?.says ?? null, requestId };
+  if (known === null || known.code === 'BUG') console.error(JSON.stringify({ level: 'error', requestId, path: context.routePattern, message: error instanceof Error ? error.stack : String(error) }));
+  try {
+    const page = await context.rewrite(new Request(new URL('/refused', context.url), { method: 'GET', headers: { accept: 'text/html' } }));
+    return withHeaders(new Response(page.body, { status: known?.status ?? 500, headers: page.headers }), true);
+  } catch {
+    return new Response(null, { status: 500 });
+  }
+}

@@ -1,0 +1,28 @@
+/**
+ * Who may come in at each route: the second lock, in front of the policies. A route that is not in this table is
+ * closed to everybody, and a test fails; so a new page begins with a line here.
+ */
+export type RouteRule =
+  /** Everybody. What is shown is decided by policies. */
+  | 'public'
+  /** Machines with a signature or a token of their own: no session, no origin check. */
+  | 'machine'
+  | 'signed-in'
+  /** The owner of a workroom. */
+  | 'teacher'
+  /** The owner of a workroom or one of her helpers. */
+  | 'bench'
+  | 'steward';
+
+export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
+  '/': 'public',
+  '/refused': 'public',
+  '/404': 'public',
+  '/500': 'public',
+  '/_components': 'public',
+  '/sign-in': 'public',
+  '/sign-out': 'public',
+  '/_actions/[...path]': 'public',
+  '/_image': 'public',
+  '/_server-islands/[name]': 'public',
+};
