@@ -44,7 +44,10 @@ function open(): Sequelize {
     define: { underscored: true, charset: 'utf8mb4' },
     dialectOptions: {
       // Refuses what the columns cannot hold instead of cutting it off, and never lets a forgotten query hold a row for long.
-      initSql: ["SET SESSION sql_mode='STRICT_ALL_TABLES,ONLY_FULL_GROUP_BY,NO_ENGINE_SUBSTITUTION', innodb_lock_wait_timeout=5, transaction_isolation='READ-COMMITTED'"],
+      initSql: [
+        "SET SESSION sql_mode='STRICT_ALL_TABLES,ONLY_FULL_GROUP_BY,NO_ENGINE_SUBSTITUTION', innodb_lock_wait_timeout=5",
+        'SET SESSION TRANSACTION ISOLATION LEVEL READ COMMITTED',
+      ],
       // Result rows keep their numbers: identifiers stay below 2^53 by column type.
       insertIdAsNumber: true,
       bigIntAsNumber: true,
@@ -53,8 +56,8 @@ function open(): Sequelize {
   });
   sequelize.addHook('beforeConnect', (options) => {
     const { host, port, user, password, name, socket } = config().database;
-    Object.assign(options, { host, port, username: user, password, database: name });
-    if (socket !== undefined) options.dialectOptions = { ...options.dialectOptions, socketPath: socket };
+    const dialectOptions = socket === undefined ? options.dialectOptions : { ...options.dialectOptions, socketPath: socket };
+    Object.assign(options, { host, port, username: user, password, database: name, dialectOptions });
   });
   return sequelize;
 }

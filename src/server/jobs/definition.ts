@@ -7,10 +7,8 @@ export interface JobDefinition<P> {
   readonly maxAttempts: number;
   /** Seconds to wait before each further try; the last one holds for all later tries. */
   readonly backoffSeconds: readonly number[];
-  /** Seconds one try may take before another worker may claim it. */
-  readonly leaseSeconds: number;
 }
 
-export function defineJob<P>(definition: Omit<JobDefinition<P>, 'maxAttempts' | 'backoffSeconds' | 'leaseSeconds'> & Partial<JobDefinition<P>>): JobDefinition<P> {
-  return { maxAttempts: 8, backoffSeconds: [2, 10, 60, 300, 1_800], leaseSeconds: 60, ...definition };
+export function defineJob<P>(definition: Omit<JobDefinition<P>, 'maxAttempts' | 'backoffSeconds'> & Partial<JobDefinition<P>>): JobDefinition<P> {
+  return { maxAttempts: 8, backoffSeconds: [2, 10, 60, 300, 1_800], ...definition };
 }

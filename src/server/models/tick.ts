@@ -1,4 +1,4 @@
-import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
+import { Model, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import { moment, oneOf, ref, text, yes } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 

@@ -1,0 +1,13 @@
+/** Every letter the house writes, by name. A template's data is checked when the letter is written and again when it is sent. */
+import type { z } from 'astro/zod';
+import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
+
+export const TEMPLATES = {
+  'account-exists': accountExists,
+  'confirm-address': confirmAddress,
+  'new-password': newPassword,
+  'password-changed': passwordChanged,
+} as const;
+
+export type TemplateName = keyof typeof TEMPLATES;
+export type TemplateData<T extends TemplateName> = z.input<(typeof TEMPLATES)[T]['data']>;
