@@ -1,0 +1,50 @@
+/**
+ * Before the tests of a worker: its own database on the running MariaDB, at the newest schema, and settings that point at it.
+ * Between tests every row goes; tests open their own transactions, so none can be wrapped around them.
+ */
+import { mkdtempSync } from 'node:fs';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import * as mariadb from 'mariadb';
+import { afterAll, beforeAll, beforeEach } from 'vitest';
+
+const server = process.env.FELLMARK_TEST_DATABASE_URL;
+if (server === undefined) throw new Error('FELLMARK_TEST_DATABASE_URL must name a MariaDB server on which databases may be made');
+const name = `fellmark_test_${process.env.FELLMARK_TEST_RUN ?? 'local'}_${process.env.VITEST_POOL_ID ?? '1'}`;
+
+Object.assign(process.env, {
+  TZ: 'America/New_York',
+  FELLMARK_MODE: 'test',
+  FELLMARK_DEMO: 'on',
+  FELLMARK_DATABASE_URL: new URL(`/${name}`, server).href,
+  FELLMARK_SECRET: 'a secret of tests, forty characters long',
+  FELLMARK_UPLOADS: mkdtempSync(join(tmpdir(), 'fellmark-uploads-')),
+  FELLMARK_PAYMENTS_URL: 'http://127.0.0.1:9',
+  FELLMARK_PAYMENTS_KEY: 'sk_test_of_tests',
+  FELLMARK_PAYMENTS_WEBHOOK_SECRETS: 'whsec_of_tests',
+});
+
+beforeAll(async () => {
+  const { hostname, port, username, password } = new URL(server);
+  const connection = await mariadb.createConnection({ host: hostname, port: Number(port || 3306), user: decodeURIComponent(username), password: decodeURIComponent(password) });
+  await connection.query(`CREATE DATABASE IF NOT EXISTS ${name}`);
+  await connection.end();
+  const { migrate } = await import('#server/db/migrator.ts');
+  await migrate();
+});
+
+beforeEach(async () => {
+  const { sequelize } = await import('#server/db/sequelize.ts');
+  const tables = Object.values(sequelize.models).map((model) => model.getTableName());
+  await sequelize.transaction(async () => {
+    await sequelize.query('SET FOREIGN_KEY_CHECKS = 0');
+    for (const table of [...tables, 'rate_windows']) await sequelize.query(`DELETE FROM ${String(table)}`);
+    await sequelize.query('UPDATE receipt_counters SET last_number = 0');
+    await sequelize.query('SET FOREIGN_KEY_CHECKS = 1');
+  });
+});
+
+afterAll(async () => {
+  const { sequelize } = await import('#server/db/sequelize.ts');
+  await sequelize.close();
+});
