@@ -10,6 +10,7 @@ import { actorOfToken, sessionCookie } from '#server/auth/sessions.ts';
 import { config } from '#server/config.ts';
 import { systemClock } from '#server/context.ts';
 import { AppError } from '#server/errors.ts';
+import { presentSitePerson } from '#server/presenters/site-person.ts';
 import { services } from '#server/services.ts';
 import type { FormAnswer } from '#server/web/form.ts';
 import { gate } from '#server/web/gate.ts';
@@ -32,6 +33,7 @@ export const onRequest = defineMiddleware(async (context, next) => {
     }
     const actor = rule === 'machine' ? null : await actorOfToken(context.cookies.get(sessionCookie().name)?.value);
     locals.ctx = { actor, requestId, ip: context.clientAddress, clock: systemClock, services: services() };
+    locals.person = actor === null ? null : presentSitePerson(actor);
     locals.said = takeSaid(context);
     const answer = gate(rule, actor);
     if (answer === 'nothing-here') throw new AppError('NOT_FOUND');

@@ -1,5 +1,5 @@
+import { parseMailAddress } from '#core/mail-address.ts';
 import type { SignInInput } from '#contracts/people.ts';
-import { addressKey } from '#server/auth/address.ts';
 import { hashPassword, needsRehash, passwordFits } from '#server/auth/passwords.ts';
 import { beginSession, endSession, type Begun } from '#server/auth/sessions.ts';
 import type { Context } from '#server/context.ts';
@@ -13,7 +13,8 @@ import { countUse, networkOf, RATE_RULES } from '#server/web/rate-limit.ts';
  * @throws VALIDATION at `password`; RATE_LIMITED.
  */
 export async function signIn(ctx: Context, input: SignInInput, device: string): Promise<Begun> {
-  const key = addressKey(input.email);
+  const address = parseMailAddress(input.email);
+  const key = address.ok ? address.value.key : null;
   await countUse(RATE_RULES.signInByAddress, networkOf(ctx.ip));
   await countUse(RATE_RULES.signInByAccount, `${key ?? input.email} ${networkOf(ctx.ip)}`);
   const user = key === null ? null : await User.findOne({ where: { emailKey: key } });

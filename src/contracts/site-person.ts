@@ -1,0 +1,13 @@
+// What the frame of a page needs to know of the person who asks for it.
+
+export type Role = 'student' | 'teacher' | 'helper' | 'steward';
+
+export interface SitePerson {
+  name: string;
+  roles: readonly Role[];
+  /** Her own choice of day or evening; absent or null: the system's wish. */
+  scheme?: 'light' | 'dark' | null;
+  units?: 'cm' | 'in';
+  /** Name of the workroom she works in, shown beside the mark inside the workroom. */
+  workroom?: string | null;
+}
