@@ -140,10 +140,10 @@ describe('Low Tide', () => {
       { rule: 'at-once' },
       { rule: 'at-once' },
       { rule: 'after-verdict', part: 2 },
-      { rule: 'at-once' },
-      { rule: 'at-once' },
+      { rule: 'after-verdict', part: 2 },
+      { rule: 'after-verdict', part: 2 },
       { rule: 'after-verdict', part: 5 },
-      { rule: 'at-once' },
+      { rule: 'after-verdict', part: 5 },
     ]);
   });
 
