@@ -9,6 +9,8 @@ export class LessonVersion extends Model<InferAttributes<LessonVersion>, InferCr
   declare number: number;
   declare source: string;
   declare tree: unknown;
+  /** Names of the videos and pictures the text shows: whoever may read it may see them. */
+  declare mediaNames: CreationOptional<string[]>;
   declare authorId: CreationOptional<number | null>;
   declare createdAt: CreationOptional<Date>;
 }
@@ -19,6 +21,7 @@ LessonVersion.init({
   number: count(),
   source: longText(),
   tree: json(),
+  mediaNames: { ...json(), defaultValue: [] },
   authorId: maybeRef(),
   createdAt: moment(),
 }, { sequelize, tableName: 'lesson_versions', updatedAt: false });

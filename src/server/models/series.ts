@@ -10,7 +10,7 @@ export class Series extends Model<InferAttributes<Series>, InferCreationAttribut
   declare slug: string;
   declare title: string;
   declare craft: CreationOptional<'frame-loom' | 'macrame'>;
-  declare level: CreationOptional<'first-piece' | 'some-practice' | 'sure-hand'>;
+  declare level: CreationOptional<'beginner' | 'some-practice' | 'sure-hand'>;
   declare summary: CreationOptional<string>;
   declare story: CreationOptional<string>;
   declare techniques: CreationOptional<string[]>;
@@ -30,7 +30,7 @@ Series.init({
   slug: text(64),
   title: text(120),
   craft: oneOf(['frame-loom', 'macrame'], 'frame-loom'),
-  level: oneOf(['first-piece', 'some-practice', 'sure-hand'], 'first-piece'),
+  level: oneOf(['beginner', 'some-practice', 'sure-hand'], 'beginner'),
   summary: { ...text(400), defaultValue: '' },
   story: longText(),
   techniques: { ...json(), defaultValue: [] },

@@ -1,0 +1,45 @@
+/** A file with all that decides who may see it. */
+import { QueryTypes } from 'sequelize';
+import type { Actor } from '#server/context.ts';
+import { sequelize } from '#server/db/sequelize.ts';
+import { Media } from '#server/models/index.ts';
+import { maySeeMedia, type MediaUse } from '#server/policies/media.ts';
+import { seriesFor } from '#server/queries/series/series-for.ts';
+
+/** The file, when `actor` may see it; null when there is none or it must look so. */
+export async function mediaFor(actor: Actor | null, publicId: string, now: Date): Promise<Media | null> {
+  const media = await Media.findOne({ where: { publicId } });
+  if (media === null) return null;
+  const uses = media.kind === 'photo' ? await photoUses(media.id) : await lessonUses(actor, media.id, now);
+  return maySeeMedia(actor, media.ownerId, uses) ? media : null;
+}
+
+async function photoUses(mediaId: number): Promise<MediaUse[]> {
+  const rows = await sequelize.query<{ studentId: number; workroomId: number }>(
+    `SELECT e.user_id AS studentId, s.workroom_id AS workroomId
+       FROM progress_photos p JOIN enrolments e ON e.id = p.enrolment_id JOIN series s ON s.id = e.series_id
+      WHERE p.media_id = ?`,
+    { replacements: [mediaId], type: QueryTypes.SELECT },
+  );
+  return rows.map((row) => ({ kind: 'progress-photo', ...row }));
+}
+
+async function lessonUses(actor: Actor | null, mediaId: number, now: Date): Promise<MediaUse[]> {
+  const rows = await sequelize.query<{ slug: string; lessonId: number | null }>(
+    `SELECT s.slug, l.id AS lessonId
+       FROM series_media m
+       JOIN series s ON s.id = m.series_id
+       LEFT JOIN lessons l ON l.series_id = s.id AND l.taken_out_at IS NULL
+        AND EXISTS (SELECT 1 FROM lesson_versions v WHERE v.id = l.published_version_id AND JSON_CONTAINS(v.media_names, JSON_QUOTE(m.name)))
+      WHERE m.media_id = ?`,
+    { replacements: [mediaId], type: QueryTypes.SELECT },
+  );
+  const uses: MediaUse[] = [];
+  for (const slug of new Set(rows.map((row) => row.slug))) {
+    const series = await seriesFor(actor, slug, now);
+    if (series === null) continue;
+    const lessonIds = new Set(rows.filter((row) => row.slug === slug).map(({ lessonId }) => lessonId));
+    uses.push({ kind: 'lesson', workroomId: series.workroom.id, accesses: series.parts.filter(({ id }) => lessonIds.has(id)).map(({ access }) => access) });
+  }
+  return uses;
+}

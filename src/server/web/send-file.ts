@@ -1,0 +1,18 @@
+/** The answer by which an endpoint hands a file to the front server, which streams it with ranges and back-pressure. */
+import type { MediaFile } from '#contracts/media.ts';
+
+/** Read and taken off by the front server; never reaches a browser. */
+export const SEND_HEADER = 'X-Fellmark-Send';
+
+/** Browsers may keep it, nobody in between; and it can do nothing but be shown. */
+export function sendFile(file: MediaFile): Response {
+  return new Response(null, {
+    headers: {
+      [SEND_HEADER]: file.key,
+      'Content-Type': file.contentType,
+      'Cache-Control': 'private, max-age=3600',
+      Vary: 'Cookie',
+      'Content-Security-Policy': "sandbox; default-src 'none'",
+    },
+  });
+}
