@@ -20,6 +20,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/404': 'public',
   '/500': 'public',
   '/_components': 'public',
+  '/api/payments/events': 'machine',
   '/media/[id]/[file]': 'public',
   '/sign-in': 'public',
   '/sign-out': 'public',

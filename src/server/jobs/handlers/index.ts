@@ -2,6 +2,7 @@
 import type { z } from 'astro/zod';
 import type { Context } from '#server/context.ts';
 import type { JobDefinition } from '#server/jobs/definition.ts';
+import { settleCheckout, settlePaymentEvent } from '#server/jobs/definitions/payments.ts';
 
 export interface RegisteredJob {
   readonly definition: JobDefinition<unknown>;
@@ -17,4 +18,13 @@ export function bind<P>(definition: JobDefinition<P>, load: () => Promise<(ctx: 
   };
 }
 
-export const REGISTERED: readonly RegisteredJob[] = [];
+export const REGISTERED: readonly RegisteredJob[] = [
+  bind(settlePaymentEvent, async () => {
+    const { settleEvent } = await import('#server/use-cases/checkout/settle-event.ts');
+    return (ctx, { eventId }) => settleEvent(ctx, eventId);
+  }),
+  bind(settleCheckout, async () => {
+    const { settleCheckout: settle } = await import('#server/use-cases/checkout/settle-checkout.ts');
+    return async (ctx, { checkoutId }) => { await settle(ctx, checkoutId); };
+  }),
+];
