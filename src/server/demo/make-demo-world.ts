@@ -1,0 +1,30 @@
+/** The demo world, made once into an empty database, through the same use-cases as any other. */
+import { actingAs } from '#server/demo/acting-as.ts';
+import { makePeople } from '#server/demo/people.ts';
+import { bringMaudToPartTwo, giveSeat } from '#server/demo/progress.ts';
+import { bringIn } from '#server/demo/series.ts';
+import { User } from '#server/models/index.ts';
+import { publishSeries } from '#server/use-cases/series/publish-series.ts';
+
+/** @returns false when somebody lives here already. */
+export async function makeDemoWorld(password: string, say: (line: string) => void): Promise<boolean> {
+  if ((await User.count()) > 0) return false;
+  const now = new Date();
+  const { users, saltmarsh, cordage } = await makePeople(password, now);
+  const person = (address: string): User => {
+    const user = users.get(address);
+    if (user === undefined) throw new RangeError(address);
+    return user;
+  };
+  say('people and workrooms');
+  const ilse = person('ilse@saltmarsh.example');
+  const lowTide = await bringIn(ilse, saltmarsh, 'low-tide');
+  await bringIn(person('teodor@cordage.example'), cordage, 'three-knotted-cords');
+  say('series');
+  await publishSeries(await actingAs(ilse), lowTide.slug);
+  const maudsSeat = await giveSeat(person('maud@weavers.example'), lowTide, 9, now);
+  await giveSeat(person('jonas@weavers.example'), lowTide, 2, now);
+  await bringMaudToPartTwo(person('maud@weavers.example'), lowTide, maudsSeat);
+  say('students');
+  return true;
+}

@@ -1,0 +1,60 @@
+/** The invented people of the demo world, and their workrooms. */
+import { parseMailAddress } from '#core/mail-address.ts';
+import { hashPassword } from '#server/auth/passwords.ts';
+import { User, Workroom, WorkroomHelper } from '#server/models/index.ts';
+
+export interface DemoPerson {
+  readonly address: string;
+  readonly name: string;
+  readonly role: string;
+}
+
+export const DEMO_PEOPLE: readonly DemoPerson[] = [
+  { address: 'ilse@saltmarsh.example', name: 'Ilse Marrow', role: 'teacher of Low Tide' },
+  { address: 'wren@saltmarsh.example', name: 'Wren Okafor', role: 'helps Ilse at the bench' },
+  { address: 'teodor@cordage.example', name: 'Teodor Brandl', role: 'teacher, his series still a draft' },
+  { address: 'maud@weavers.example', name: 'Maud Ellery', role: 'student in part 2, her photo waits' },
+  { address: 'jonas@weavers.example', name: 'Jonas Pike', role: 'student, nothing done yet' },
+  { address: 'amara@weavers.example', name: 'Amara Voss', role: 'has no seat yet' },
+  { address: 'pell@office.example', name: 'Pell Harrow', role: 'steward' },
+];
+
+export interface DemoFolk {
+  readonly users: ReadonlyMap<string, User>;
+  readonly saltmarsh: Workroom;
+  readonly cordage: Workroom;
+}
+
+export async function makePeople(password: string, now: Date): Promise<DemoFolk> {
+  const users = new Map<string, User>();
+  for (const { address, name } of DEMO_PEOPLE) {
+    const parsed = parseMailAddress(address);
+    if (!parsed.ok) throw new RangeError(address);
+    users.set(address, await User.create({
+      email: parsed.value.address,
+      emailKey: parsed.value.key,
+      name,
+      passwordHash: await hashPassword(password),
+      emailConfirmedAt: now,
+      timeZone: 'Europe/Berlin',
+      isSteward: address === 'pell@office.example',
+    }));
+  }
+  const idOf = (address: string): number => users.get(address)?.id ?? 0;
+  const saltmarsh = await Workroom.create({
+    ownerId: idOf('ilse@saltmarsh.example'),
+    handle: 'saltmarsh',
+    name: 'Saltmarsh Loom Room',
+    about: 'I teach frame weaving in a room above a boat shed, at the edge of a salt marsh. What I show is what I see from there: water, mud, grass and a great deal of sky. I have taught people to weave for nineteen years, most of them people who were sure that they could not.',
+    timeZone: 'Europe/Berlin',
+  });
+  const cordage = await Workroom.create({
+    ownerId: idOf('teodor@cordage.example'),
+    handle: 'cordage',
+    name: 'Brandl Cordage',
+    about: 'Rope and knots, from the harbour to the wall. I come from a family of riggers; what I teach holds.',
+    timeZone: 'Europe/Berlin',
+  });
+  await WorkroomHelper.create({ workroomId: saltmarsh.id, userId: idOf('wren@saltmarsh.example') });
+  return { users, saltmarsh, cordage };
+}
