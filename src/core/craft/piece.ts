@@ -105,16 +105,13 @@ export interface Dowel {
 export type ShapeKind = 'triangle' | 'rectangle' | 'circle';
 export type ShapeJoin = 'slit' | 'dovetail' | 'interlock';
 
-/** A figure woven into the ground of a tabby band. */
-export interface Shape {
-  readonly shape: ShapeKind;
+/** A triangle's base is its first row. */
+export type ShapeMeasures =
+  | { readonly shape: 'triangle' | 'rectangle'; readonly baseMm: number; readonly heightMm: number; readonly radiusMm?: never }
+  | { readonly shape: 'circle'; readonly radiusMm: number; readonly baseMm?: never; readonly heightMm?: never };
+
+interface ShapePlacing {
   readonly yarn: string;
-  /** Triangle and rectangle: width of the first row. */
-  readonly baseMm?: number;
-  /** Triangle and rectangle. */
-  readonly heightMm?: number;
-  /** Circle. */
-  readonly radiusMm?: number;
   /** Middle of the base, from the left selvedge; the middle of the piece when missing. */
   readonly centreMm?: number;
   /** From the band's first row; 0 when missing. */
@@ -126,6 +123,9 @@ export interface Shape {
   /** How the colours meet; `slit` when missing. */
   readonly join?: ShapeJoin;
 }
+
+/** A figure woven into the ground of a tabby band. */
+export type Shape = ShapeMeasures & ShapePlacing;
 
 interface NamedBand {
   /** How lessons refer to the band: `^[a-z0-9-]{1,40}$`, unique in the piece. */

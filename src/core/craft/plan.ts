@@ -1,104 +1,26 @@
+/** The plan: every number reckoned from a piece. */
+import { planFrameLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
+import type { Plan } from '#core/craft/plan-types.ts';
+import { Fields } from '#core/craft/reading/fields.ts';
+import { Findings } from '#core/craft/reading/findings.ts';
+import type { Outcome } from '#core/outcome.ts';
+import type { Units } from '#core/units/units.ts';
+
+export type * from '#core/craft/plan-types.ts';
+
+/** Each craft a piece can be made in, with what reads and reckons it. */
+const CRAFTS = { 'frame-loom': planFrameLoom } as const;
+const CRAFT_NAMES = ['frame-loom'] as const satisfies readonly (keyof typeof CRAFTS)[];
+
 /**
- * The plan: every number reckoned from a piece. Lengths are millimetres, masses
- * grams, time hours; nothing is rounded but counts.
+ * Reckons the plan of a piece. Never throws for what a person may send: whatever is
+ * wrong comes back as problems, all of them at once, one for each refused value.
+ * `units` are those in which messages name lengths.
  */
-import { fail, type Outcome, type Problem } from '#core/outcome.ts';
-import type { TechniqueName } from '#core/craft/piece.ts';
-
-export interface EndsPlan {
-  /** Ends on the loom. */
-  readonly count: number;
-  /** What the weft treats as one: half of `count` when ends are doubled. */
-  readonly working: number;
-  /** Ends the width asks for before rounding and parity. */
-  readonly raw: number;
-  /** Between working ends. */
-  readonly spacingMm: number;
-  readonly nailsTop: number;
-  readonly nailsBottom: number;
-  /** From the first end to the last. */
-  readonly woundWidthMm: number;
-  /** Width of the cloth on the loom, before it draws in. */
-  readonly loomWidthMm: number;
-}
-
-export interface LoomPlan {
-  readonly insideWidthNeededMm: number;
-  readonly heightOnLoomMm: number;
-  readonly heightNeededMm: number;
-  readonly topMm: number;
-  readonly bottomMm: number;
-}
-
-/** Of the yarn most picks are woven with. */
-export interface WeftPlan {
-  readonly diameterSumMm: number;
-  readonly pickSpacingMm: number;
-  readonly tightness: number;
-  readonly crimp: number;
-  /** Yarn from one working end to the next. */
-  readonly stepMm: number;
-  /** Yarn round the selvedge end. */
-  readonly turnMm: number;
-  readonly pickMm: number;
-  readonly rawPicks: number;
-}
-
-export interface WarpPlan {
-  readonly netMm: number;
-  readonly withMarginMm: number;
-  /** Of the net length. */
-  readonly massG: number;
-  readonly balls?: number;
-}
-
-export interface YarnPlan extends WarpPlan {
-  /** Shuttles or butterflies to fill. */
-  readonly loads: number;
-  readonly rowsPerLoad: number;
-}
-
-export interface BandPlan {
-  readonly index: number;
-  readonly technique: TechniqueName;
-  readonly heightMm: number;
-  readonly picks?: number;
-  readonly stitches?: number;
-  readonly knots?: number;
-  readonly strands?: number;
-  readonly cutMm?: number;
-  /** By yarn role. */
-  readonly yarnMm: Readonly<Record<string, number>>;
-}
-
-export interface CutPlan {
-  readonly spacerCard: { readonly widthMm: number; readonly heightMm: number };
-  readonly dowel?: { readonly lengthMm: number; readonly minDiameterMm: number };
-  readonly cordMm?: number;
-}
-
-export interface Hours {
-  readonly likely: number;
-  readonly low: number;
-  readonly high: number;
-}
-
-export interface Plan {
-  readonly ends: EndsPlan;
-  readonly loom: LoomPlan;
-  readonly weft: WeftPlan;
-  readonly warp: WarpPlan;
-  /** By yarn role. */
-  readonly yarns: Readonly<Record<string, YarnPlan>>;
-  readonly bands: readonly BandPlan[];
-  readonly cut: CutPlan;
-  /** Of the finished piece: warp and weft without margins. */
-  readonly massG: number;
-  readonly hours: Hours;
-  readonly warnings: readonly Problem[];
-}
-
-/** Reckons the plan of a piece. Never throws for what a person may send; the warnings are those of the plan. */
-export function planPiece(_piece: unknown): Outcome<Plan> {
-  return fail([{ code: 'E_ENUM', path: '/craft', message: 'No craft can be reckoned yet.' }]);
+export function planPiece(piece: unknown, units: Units = 'cm'): Outcome<Plan> {
+  const findings = new Findings(units);
+  const fields = Fields.of(piece, '', 'A piece', findings);
+  const craft = findings.soundly(() => fields.choice('craft', 'Craft', CRAFT_NAMES));
+  const reckoned = craft === undefined ? undefined : CRAFTS[craft](fields);
+  return findings.outcome(reckoned && { ...reckoned, warnings: findings.warnings });
 }

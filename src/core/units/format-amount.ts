@@ -1,7 +1,6 @@
 /** An amount as text for the eye, in the units a person chose. */
 import type { Amount } from '#core/craft/amounts.ts';
-
-export type Units = 'cm' | 'in';
+import type { Units } from '#core/units/units.ts';
 
 /**
  * A stretch of an amount's text. Markup sets `fraction` with the font's fractions;

@@ -1,0 +1,82 @@
+/** What the whole piece takes of each yarn: lengths with their tails, loads, mass, balls. */
+import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
+import type { Settings } from '#core/craft/frame-loom/settings.ts';
+import type { Loom, Warp, Yarn } from '#core/craft/piece.ts';
+import type { WarpPlan, YarnPlan } from '#core/craft/plan-types.ts';
+import { rowsPerLoad } from '#core/craft/picks.ts';
+import { ballsFor, withMargin } from '#core/craft/purchase.ts';
+import type { Findings } from '#core/craft/reading/findings.ts';
+import { ceilSafe } from '#core/craft/rounding.ts';
+import { threadOn, type DressedLoom, type Woven, type YarnUse } from '#core/craft/techniques/technique.ts';
+import { warpLength } from '#core/craft/warp.ts';
+import { massOf } from '#core/craft/yarn/thread.ts';
+import { TIE_MM } from '#core/craft/defaults.ts';
+
+interface Skein {
+  readonly yarn: Yarn;
+  readonly tex: number;
+  readonly netMm: number;
+  readonly margin: number;
+  /** Where the yarn stands in the piece. */
+  readonly path: string;
+}
+
+function toBuy({ yarn, tex, netMm, margin, path }: Skein, findings: Findings): WarpPlan {
+  const withMarginMm = withMargin(netMm, margin);
+  const bought = { netMm, withMarginMm, massG: massOf(netMm, tex) };
+  if (yarn.ball === undefined) return bought;
+  const balls = ballsFor(withMarginMm, yarn.ball.metres);
+  if (balls.tight) {
+    const rest = findings.length(balls.leftOverMm);
+    findings.warn('W_TIGHT', `${path}/ball`, `Only ${rest} would be left of the last ball. One ball more of the same dye lot is safer.`);
+  }
+  return { ...bought, balls: balls.count };
+}
+
+/** Warp yarn: it spans the whole frame, used or not. */
+export function countWarp(warp: Warp, loom: Loom, dressed: DressedWarp, settings: Settings, findings: Findings): WarpPlan {
+  const threadMm = warpLength({
+    ends: dressed.ends.count,
+    frameHeightMm: loom.insideHeightMm,
+    nailDiameterMm: dressed.nailDiameterMm,
+    warpDiameterMm: dressed.thread.compressedMm,
+    tieMm: warp.tieMm ?? TIE_MM,
+  });
+  const { tex, strands } = dressed.thread;
+  return toBuy({ yarn: warp.yarn, tex, netMm: threadMm * strands, margin: settings.marginWarp, path: '/warp/yarn' }, findings);
+}
+
+const sum = (uses: readonly YarnUse[], of: 'threadMm' | 'yarnMm'): number => uses.reduce((total, use) => total + use[of], 0);
+
+/** The row a load mostly goes into: that of the band which takes most of the yarn. */
+function mainRow(uses: readonly YarnUse[]): number | undefined {
+  return [...uses].sort((a, b) => b.threadMm - a.threadMm).find(({ rowMm }) => rowMm !== undefined)?.rowMm;
+}
+
+interface Loads {
+  readonly count: number;
+  /** Loads that begin and end inside the cloth, with two tails each. */
+  readonly joined: number;
+}
+
+function loadsFor(uses: readonly YarnUse[], loadMm: number): Loads {
+  const shuttleMm = sum(uses.filter(({ carry }) => carry === 'shuttle'), 'threadMm');
+  const byTheRowMm = sum(uses.filter(({ carry }) => carry === 'by-the-row'), 'threadMm');
+  const joined = ceilSafe(shuttleMm / loadMm);
+  return { joined, count: joined + ceilSafe(byTheRowMm / loadMm) };
+}
+
+/** One weft yarn over all bands. */
+export function countYarn(role: string, yarn: Yarn, woven: readonly Woven[], loom: DressedLoom, settings: Settings, findings: Findings): YarnPlan {
+  const uses = woven.flatMap((band) => band.uses.filter((use) => use.role === role));
+  const { tex, strands } = threadOn(loom, role);
+  const loads = loadsFor(uses, settings.loadMm);
+  const tailsMm = loads.joined * 2 * settings.tailMm * strands;
+  const netMm = sum(uses, 'yarnMm') + tailsMm;
+  const rowMm = mainRow(uses);
+  return {
+    ...toBuy({ yarn, tex, netMm, margin: settings.marginWeft, path: `/yarns/${role}` }, findings),
+    loads: loads.count,
+    rowsPerLoad: rowMm === undefined ? 0 : rowsPerLoad(settings.loadMm, rowMm),
+  };
+}

@@ -1,0 +1,137 @@
+/** Dressing the loom: how many ends the width takes, and whether loom and piece fit each other. */
+import { NAIL_DIAMETER_MM, ASHENHURST_K } from '#core/craft/defaults.ts';
+import { END_RANGE, endsFor, endsSuit, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
+import type { Settings } from '#core/craft/frame-loom/settings.ts';
+import { bottomAllowance, heightAfterShrinking, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
+import {
+  endsOnNails,
+  endsPerMm,
+  nailsOnRail,
+  nailsUsed,
+  railNeeded,
+  usedPitch,
+  workingSpacing,
+  type NailLayout,
+} from '#core/craft/nails.ts';
+import type { Dowel, EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
+import type { EndsPlan, LoomPlan } from '#core/craft/plan-types.ts';
+import type { Findings } from '#core/craft/reading/findings.ts';
+import { diameterTogether } from '#core/craft/yarn/diameter.ts';
+import { threadOf, type Thread } from '#core/craft/yarn/thread.ts';
+
+export interface DressedWarp {
+  readonly ends: EndsPlan;
+  readonly insideWidthNeededMm: number;
+  /** One end. */
+  readonly thread: Thread;
+  /** Compressed, of a working end: two ends together are √2 as thick as one. */
+  readonly workingDiameterMm: number;
+  readonly nailDiameterMm: number;
+}
+
+interface Demands {
+  readonly together: EndsTogether;
+  readonly parity: Parity;
+}
+
+function layoutOf(loom: Loom): NailLayout {
+  return { pitchMm: usedPitch(loom.nailPitchMm, loom.everyNthNail ?? 1), warping: loom.warping };
+}
+
+/** In words: `an even number of ends`. */
+function parityWords({ together, parity }: Demands): string {
+  const kind = parity === 'any' ? '' : `${parity} `;
+  if (together === 1) return `${parity === 'even' || parity === 'odd' ? 'an ' : 'a '}${kind}number of ends`;
+  return parity === 'any' ? 'ends in pairs' : `${parity === 'even' ? 'an even' : 'an odd'} number of pairs of ends`;
+}
+
+function pinnedEnds(pinned: number, demands: Demands, findings: Findings): number {
+  if (!endsSuit(pinned, demands.together, demands.parity)) {
+    const { count } = endsFor(pinned, demands.together, demands.parity);
+    findings.reject('E_PARITY', '/warp/endCount', `This pattern needs ${parityWords(demands)}, and ${String(pinned)} is not. ${String(count)} works.`);
+  }
+  return pinned;
+}
+
+/** Undefined if there are too few or too many to go on with. */
+function reckonedEnds(raw: number, demands: Demands, spacingMm: number, findings: Findings): number | undefined {
+  const { count, raisedBy } = endsFor(raw, demands.together, demands.parity);
+  if (count < END_RANGE.min || count > END_RANGE.max) {
+    const words = `${String(count)} ends are too ${count < END_RANGE.min ? 'few' : 'many'} to weave with.`;
+    findings.reject('E_RANGE', '/size/widthMm', `${words} Between ${String(END_RANGE.min)} and ${String(END_RANGE.max)} works.`);
+    return undefined;
+  }
+  if (raisedBy > 0) {
+    const from = String(count - raisedBy);
+    const wider = findings.length((raisedBy * spacingMm) / demands.together);
+    findings.warn('W_PARITY', demands.parity === 'any' ? '/warp/endsTogether' : '/warp/parity',
+      `This pattern needs ${parityWords(demands)}. ${from} becomes ${String(count)}; the cloth grows by ${wider}.`);
+  }
+  return count;
+}
+
+/** Pinned ends may come out at another width than was asked; a whole spacing of difference is worth a word. */
+function checkPinnedWidth(count: number, raw: number, loomToFinished: number, findings: Findings): void {
+  if (Math.abs(count - raw) <= 2) return;
+  findings.warn('W_WIDTH', '/warp/endCount', `${String(count)} ends come out ${findings.length(count * loomToFinished)} wide, not as wide as was asked.`);
+}
+
+function checkInsideWidth(loom: Loom, warp: Warp, neededMm: number, widthOf: (ends: number) => number, findings: Findings): void {
+  if (loom.insideWidthMm === undefined || neededMm <= loom.insideWidthMm) return;
+  const layout = layoutOf(loom);
+  const nails = nailsOnRail(loom.insideWidthMm, layout.pitchMm);
+  let most = endsOnNails(nails, layout.warping);
+  while (most >= END_RANGE.min && !endsSuit(most, warp.endsTogether ?? 1, warp.parity ?? 'any')) most -= 1;
+  const largest = most < END_RANGE.min ? 'No width fits at this spacing.' : `At this spacing up to ${findings.length(widthOf(most), 'down')} fit.`;
+  const inside = `The loom is ${findings.length(loom.insideWidthMm)} inside.`;
+  findings.reject('E_FIT', '/loom/insideWidthMm', `${inside} The piece needs ${findings.length(neededMm, 'up')}. ${largest}`);
+}
+
+/** Ends, spacing and nails of the warp; undefined if the width takes no sensible number of ends. */
+export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings: Settings, findings: Findings): DressedWarp | undefined {
+  const demands: Demands = { together: warp.endsTogether ?? 1, parity: warp.parity ?? 'any' };
+  const layout = layoutOf(loom);
+  const perMm = endsPerMm(layout);
+  const spacingMm = workingSpacing(layout, demands.together);
+  const loomWidthMm = widthBeforeDrawIn(size.widthMm, settings.drawIn);
+  const raw = rawEnds(loomWidthMm, perMm);
+  const finishedWidth = (ends: number): number => (ends / perMm) * (1 - settings.drawIn);
+  const count = warp.endCount === undefined ? reckonedEnds(raw, demands, spacingMm, findings) : pinnedEnds(warp.endCount, demands, findings);
+  if (count === undefined) return undefined;
+  if (warp.endCount !== undefined) checkPinnedWidth(count, raw, finishedWidth(1), findings);
+  const nails = nailsUsed(count, layout.warping);
+  const insideWidthNeededMm = railNeeded(nails.top, layout.pitchMm);
+  checkInsideWidth(loom, warp, insideWidthNeededMm, finishedWidth, findings);
+  const thread = threadOf(warp.yarn, ASHENHURST_K.warp);
+  return {
+    ends: {
+      count,
+      working: count / demands.together,
+      raw,
+      spacingMm,
+      nailsTop: nails.top,
+      nailsBottom: nails.bottom,
+      woundWidthMm: (count - 1) / perMm,
+      loomWidthMm,
+    },
+    insideWidthNeededMm,
+    thread,
+    workingDiameterMm: diameterTogether(thread.compressedMm, demands.together),
+    nailDiameterMm: loom.nailDiameterMm ?? NAIL_DIAMETER_MM,
+  };
+}
+
+/** Height of cloth and bare warp, against the frame. */
+export function fitHeight(size: Piece['size'], loom: Loom, settings: Settings, dowel: Dowel | undefined, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
+  const heightOnLoomMm = heightBeforeShrinking(size.heightMm, settings.relaxation, settings.wetShrinkage);
+  const topMm = topAllowance(settings.topMm, dowel?.diameterMm);
+  const bottomMm = bottomAllowance(settings.bottomMm);
+  const heightNeededMm = heightOnLoomMm + topMm + bottomMm;
+  if (loom.insideHeightMm < heightNeededMm - 1e-9) {
+    const largestMm = heightAfterShrinking(loom.insideHeightMm - topMm - bottomMm, settings.relaxation, settings.wetShrinkage);
+    const largest = largestMm <= 0 ? 'No height fits beside the unwoven warp.' : `Up to ${findings.length(largestMm, 'down')} of cloth fit.`;
+    const inside = `The loom is ${findings.length(loom.insideHeightMm)} high inside.`;
+    findings.reject('E_FIT', '/loom/insideHeightMm', `${inside} The piece needs ${findings.length(heightNeededMm, 'up')}. ${largest}`);
+  }
+  return { heightOnLoomMm, heightNeededMm, topMm, bottomMm };
+}

@@ -1,0 +1,65 @@
+/**
+ * The plan of a frame-loom piece, step by step in the order in which one number needs
+ * the other: dress the loom, lay the weft, stack the bands, then add everything up.
+ * Each step runs as far as what it needs is sound, so that a person hears of everything
+ * that is wrong at once.
+ */
+import { addUp } from '#core/craft/frame-loom/add-up.ts';
+import { dressWarp, fitHeight, type DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
+import { layWeft, threadsOf } from '#core/craft/frame-loom/lay-weft.ts';
+import { readPieceParts, type PieceParts } from '#core/craft/frame-loom/read-piece.ts';
+import { settingsOf, type Settings } from '#core/craft/frame-loom/settings.ts';
+import { collectRoles, stackBands, type UsedRoles } from '#core/craft/frame-loom/stack-bands.ts';
+import type { Plan } from '#core/craft/plan-types.ts';
+import type { Fields } from '#core/craft/reading/fields.ts';
+import { below, type Findings } from '#core/craft/reading/findings.ts';
+import type { DressedLoom } from '#core/craft/techniques/technique.ts';
+
+function warnOfUnused(parts: PieceParts, { named }: UsedRoles, findings: Findings): void {
+  for (const role of parts.yarns.keys()) {
+    if (!named.has(role)) findings.warn('W_UNUSED', below('/yarns', role), `No band is woven with “${role}”.`);
+  }
+}
+
+/** Bands without a single pick still need the plan's weft numbers: those of their first yarn. */
+function rolesToLay({ inPicks, named }: UsedRoles): ReadonlySet<string> {
+  return inPicks.size > 0 ? inPicks : new Set([...named].slice(0, 1));
+}
+
+function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: UsedRoles, findings: Findings): DressedLoom | undefined {
+  const { size, beat, mode } = parts;
+  if (size === undefined || beat === undefined) return undefined;
+  const threads = threadsOf(parts.yarns);
+  return {
+    workingEnds: warp.ends.working,
+    spacingMm: warp.ends.spacingMm,
+    warpDiameterMm: warp.workingDiameterMm,
+    widthMm: size.widthMm,
+    beat,
+    tailMm: settings.tailMm,
+    threads,
+    picks: layWeft(rolesToLay(used), threads, warp, { beat, mode }, findings),
+  };
+}
+
+function settingsFrom({ allowances, mode, beat }: PieceParts): Settings | undefined {
+  // A refused beat only leaves the margin's default open, which checking fit does not need.
+  return allowances === undefined ? undefined : settingsOf(allowances, mode, beat ?? { picksPerWeftDiameter: 1 });
+}
+
+/** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */
+export function planFrameLoom(fields: Fields): Omit<Plan, 'warnings'> | undefined {
+  const { findings } = fields;
+  const parts = readPieceParts(fields);
+  const { size, loom, warp, hanging } = parts;
+  const used = collectRoles(parts.bands, new Set(parts.yarns.keys()), findings);
+  warnOfUnused(parts, used, findings);
+  const settings = settingsFrom(parts);
+  if (settings === undefined || size === undefined || loom === undefined) return undefined;
+  const height = hanging && fitHeight(size, loom, settings, hanging.dowel, findings);
+  const dressed = warp && dressWarp(size, loom, warp, settings, findings);
+  const laid = dressed && layOn(dressed, parts, settings, used, findings);
+  const stacked = laid && stackBands(parts.bands, size.heightMm, laid, findings);
+  if (findings.count > 0 || !hanging || !height || !warp || !dressed || !laid || !stacked) return undefined;
+  return addUp({ size, loom, warp, hanging, yarns: parts.yarns, settings, height, dressed, laid, stacked }, findings);
+}

@@ -1,0 +1,199 @@
+/**
+ * Reading a frame-loom piece. Every part is read for itself, so that all that is wrong
+ * is told at once, and what is sound can still be checked against its neighbours.
+ */
+import type { Allowances, Band, Beat, Dowel, Loom, Piece, Warp, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import { BEAT_RANGE } from '#core/craft/picks.ts';
+import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
+import { below, type Findings } from '#core/craft/reading/findings.ts';
+import { present } from '#core/craft/reading/present.ts';
+import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
+import { TECHNIQUE_NAMES, TECHNIQUES } from '#core/craft/techniques/registry.ts';
+import { readYarn } from '#core/craft/yarn/read-yarn.ts';
+import { END_RANGE } from '#core/craft/ends.ts';
+
+/** The sound parts of a piece; what was refused is missing. */
+export interface PieceParts {
+  readonly size: Piece['size'] | undefined;
+  readonly loom: Loom | undefined;
+  readonly warp: Warp | undefined;
+  readonly beat: Beat | undefined;
+  readonly mode: WeaveMode;
+  readonly allowances: Allowances | undefined;
+  /** Empty when the piece has no dowel. */
+  readonly hanging: { readonly dowel?: Dowel } | undefined;
+  /** Every role, with its yarn where that is sound. */
+  readonly yarns: ReadonlyMap<string, Yarn | undefined>;
+  /** In their own order, a gap where one was refused. */
+  readonly bands: readonly (Band | undefined)[];
+}
+
+const MOST_BANDS = 200;
+const MOST_YARNS = 60;
+const ROLE = /^[a-z][a-z0-9-]{0,39}$/i;
+
+const length = (name: string, max = LONGEST_MM): NumberRule => ({ name, min: 'over-zero', max, unit: 'mm' });
+const allowance = (name: string): NumberRule => ({ name, min: 0, max: LONGEST_MM, unit: 'mm' });
+const share = (name: string, max: number): NumberRule => ({ name, min: 0, max, unit: 'share' });
+
+/** Draw-in stays below 40 %: at that the cloth would close to a cord. */
+const DRAW_IN = share('Draw-in', 0.399_999);
+const NAIL_PITCH: NumberRule = { name: 'From nail to nail', min: 1, max: 100, unit: 'mm' };
+const NTH_NAIL: NumberRule = { name: 'Every so-many-th nail', min: 1, max: 50, whole: true };
+const END_COUNT: NumberRule = { name: 'Number of ends', ...END_RANGE, whole: true };
+const SEED: NumberRule = { name: 'Seed of the drawing', min: 0, max: Number.MAX_SAFE_INTEGER, whole: true };
+const BEAT: NumberRule = { name: 'Picks in one weft thickness', ...BEAT_RANGE };
+const PICKS_PER_CM: NumberRule = { name: 'Picks in a centimetre', min: 'over-zero', max: 200 };
+
+function readSize(fields: Fields): Piece['size'] {
+  const group = fields.group('size', 'Size');
+  const size = { widthMm: group.number('widthMm', length('Width')), heightMm: group.number('heightMm', length('Height')) };
+  group.end();
+  return size;
+}
+
+function readLoom(fields: Fields): Loom {
+  const group = fields.group('loom', 'Loom');
+  const loom = {
+    nailPitchMm: group.number('nailPitchMm', NAIL_PITCH),
+    warping: group.choice('warping', 'Warping', ['zigzag', 'two-nail']),
+    insideHeightMm: group.number('insideHeightMm', length('Inside height of the loom')),
+    ...present({
+      everyNthNail: group.optionalNumber('everyNthNail', NTH_NAIL),
+      nailDiameterMm: group.optionalNumber('nailDiameterMm', length('Thickness of a nail', 50)),
+      insideWidthMm: group.optionalNumber('insideWidthMm', length('Inside width of the loom')),
+    }),
+  };
+  group.end();
+  return loom;
+}
+
+function readEndsTogether(fields: Fields): 1 | 2 | undefined {
+  const ends = fields.optionalNumber('endsTogether', { name: 'Ends worked together', min: 1, max: 2, whole: true });
+  return ends === undefined ? undefined : ends === 2 ? 2 : 1;
+}
+
+function readWarp(fields: Fields): Warp {
+  const group = fields.group('warp', 'Warp');
+  const warp = {
+    yarn: readYarn(group.group('yarn', 'Warp yarn')) ?? { tex: 1 },
+    ...present({
+      endsTogether: readEndsTogether(group),
+      parity: group.optionalChoice('parity', 'Number of ends', ['any', 'even', 'odd']),
+      endCount: group.optionalNumber('endCount', END_COUNT),
+      tieMm: group.optionalNumber('tieMm', length('Yarn for a tie')),
+    }),
+  };
+  group.end();
+  return warp;
+}
+
+function readBeat(fields: Fields): Beat {
+  const group = fields.group('beat', 'Beat');
+  const swatch = group.has('picksPerCm');
+  if (swatch && group.has('picksPerWeftDiameter')) {
+    group.take('picksPerWeftDiameter');
+    group.reject('E_ENUM', 'picksPerWeftDiameter', 'Picks counted on a swatch stand already. Give one of the two.');
+  }
+  const beat = swatch
+    ? { picksPerCm: group.number('picksPerCm', PICKS_PER_CM) }
+    : { picksPerWeftDiameter: group.number('picksPerWeftDiameter', BEAT) };
+  if (!swatch) group.take('picksPerCm');
+  group.end();
+  return beat;
+}
+
+function readAllowances(fields: Fields): Allowances {
+  const group = fields.optionalGroup('allowances', 'Allowances');
+  if (group === undefined) return {};
+  const allowances = present({
+    drawIn: group.optionalNumber('drawIn', DRAW_IN),
+    relaxation: group.optionalNumber('relaxation', share('Relaxation', 0.2)),
+    wetShrinkage: group.optionalNumber('wetShrinkage', share('Wet shrinkage', 0.2)),
+    topMm: group.optionalNumber('topMm', allowance('Unwoven warp at the top')),
+    bottomMm: group.optionalNumber('bottomMm', allowance('Unwoven warp at the bottom')),
+    tailMm: group.optionalNumber('tailMm', length('A tail', 1000)),
+    loadMm: group.optionalNumber('loadMm', length('Yarn on a shuttle', 1_000_000)),
+    marginWeft: group.optionalNumber('marginWeft', share('Margin of the weft', 1)),
+    marginWarp: group.optionalNumber('marginWarp', share('Margin of the warp', 1)),
+  });
+  group.end();
+  return allowances;
+}
+
+function readHanging(fields: Fields): { readonly dowel?: Dowel } {
+  const group = fields.optionalGroup('dowel', 'Dowel');
+  if (group === undefined) return {};
+  const diameterMm = group.number('diameterMm', length('Thickness of the dowel', 200));
+  const lengthMm = group.optionalNumber('lengthMm', { name: 'Length of the dowel', min: 60, max: LONGEST_MM, unit: 'mm' });
+  group.end();
+  return { dowel: lengthMm === undefined ? { diameterMm } : { diameterMm, lengthMm } };
+}
+
+function readYarns(fields: Fields): ReadonlyMap<string, Yarn | undefined> {
+  const group = fields.group('yarns', 'Yarns');
+  const entries = group.entries();
+  if (entries.length > MOST_YARNS) {
+    fields.reject('E_RANGE', 'yarns', `${String(entries.length)} yarns are too many. Up to ${String(MOST_YARNS)} work.`);
+    return new Map();
+  }
+  const yarns = new Map<string, Yarn | undefined>();
+  for (const [role, value] of entries) {
+    const path = group.pathOf(role);
+    const named = ROLE.test(role);
+    if (!named) fields.findings.reject('E_ENUM', path, 'A yarn role begins with a letter and goes on with letters, figures or hyphens, 40 at most.');
+    yarns.set(role, named ? readYarn(Fields.of(value, path, 'Yarn', fields.findings)) : undefined);
+  }
+  return yarns;
+}
+
+function readBand(value: unknown, path: string, findings: Findings): Band | undefined {
+  return findings.soundly(() => {
+    const fields = Fields.of(value, path, 'A band', findings);
+    const before = findings.count;
+    const technique = fields.choice('technique', 'Technique', TECHNIQUE_NAMES);
+    if (findings.count > before) return undefined;
+    const band = TECHNIQUES[technique].read(fields);
+    fields.end();
+    return band;
+  });
+}
+
+/** Each name once, or a lesson would not know which band is meant. */
+function checkNames(bands: readonly (Band | undefined)[], findings: Findings): void {
+  const seen = new Set<string>();
+  bands.forEach((band, index) => {
+    if (band?.name === undefined) return;
+    if (seen.has(band.name)) findings.reject('E_ENUM', `/bands/${String(index)}/name`, `Another band is called ${band.name} already.`);
+    seen.add(band.name);
+  });
+}
+
+function readBands(fields: Fields): readonly (Band | undefined)[] {
+  const path = fields.pathOf('bands');
+  const list = fields.list('bands', 'Bands', MOST_BANDS);
+  const bands = list.map((value, index) => readBand(value, below(path, index), fields.findings));
+  checkNames(bands, fields.findings);
+  return bands;
+}
+
+/** Reads every part of a frame-loom piece and refuses keys it does not know. */
+export function readPieceParts(fields: Fields): PieceParts {
+  const { findings } = fields;
+  fields.take('craft');
+  const parts = {
+    size: findings.soundly(() => readSize(fields)),
+    loom: findings.soundly(() => readLoom(fields)),
+    warp: findings.soundly(() => readWarp(fields)),
+    beat: findings.soundly(() => readBeat(fields)),
+    mode: fields.optionalChoice('mode', 'Mode', ['straight-warp', 'balanced']) ?? 'straight-warp',
+    allowances: findings.soundly(() => readAllowances(fields)),
+    hanging: findings.soundly(() => readHanging(fields)),
+    yarns: readYarns(fields),
+    bands: readBands(fields),
+  };
+  fields.optionalChoice('hangs', 'Hanging', ['as-woven', 'turned']);
+  fields.optionalNumber('seed', SEED);
+  fields.end();
+  return parts;
+}

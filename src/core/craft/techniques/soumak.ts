@@ -1,0 +1,115 @@
+/**
+ * Soumak: the weft is wrapped round the ends, over some and back under fewer, and lies
+ * in a ridge on the cloth. One or two picks of tabby between rows hold it.
+ */
+import type { SoumakBand } from '#core/craft/piece.ts';
+import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
+import { readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
+import {
+  loftSum,
+  picksOn,
+  pickSpacingOn,
+  threadOn,
+  rowsOf,
+  type BandReport,
+  type DressedLoom,
+  type Technique,
+  type Woven,
+} from '#core/craft/techniques/technique.ts';
+import { pickLength } from '#core/craft/picks.ts';
+
+export interface SoumakStitch {
+  /** Ends passed over on the face, at least 2. */
+  readonly over: number;
+  /** Ends gone back under, from 1 to one less than `over`. */
+  readonly back: number;
+  readonly spacingMm: number;
+  /** Warp and weft, the weft lying free. */
+  readonly diameterSumMm: number;
+}
+
+/**
+ * Weft of one stitch: its axis is a stadium round the ends, (over − 1) spacings forward on
+ * the face, (back − 1) behind, and two half turns of diameter D.
+ */
+export function soumakStitch({ over, back, spacingMm, diameterSumMm }: SoumakStitch): number {
+  return (over + back - 2) * spacingMm + Math.PI * diameterSumMm;
+}
+
+/** Weft over cloth covered. With D = 2p/π it is the simple (over + back)/(over − back). */
+export function soumakRatio(stitch: SoumakStitch): number {
+  return soumakStitch(stitch) / ((stitch.over - stitch.back) * stitch.spacingMm);
+}
+
+/** Whole stitches in a row; what is left takes a shorter last one. */
+export function soumakStitchesPerRow(ends: number, over: number, back: number): number {
+  return Math.floor((ends - over) / (over - back)) + 1;
+}
+
+const OVER: NumberRule = { name: 'Ends passed over', min: 2, max: 100, whole: true };
+const BACK: NumberRule = { name: 'Ends gone back under', min: 1, max: 99, whole: true };
+const TABBY_BETWEEN: NumberRule = { name: 'Picks of tabby between rows', min: 0, max: 100, whole: true };
+
+function read(fields: Fields): SoumakBand {
+  const over = fields.number('over', OVER);
+  const back = fields.number('back', BACK);
+  if (over !== 0 && back >= over) {
+    fields.reject('E_RANGE', 'back', `A soumak stitch goes back under fewer ends than it passed over: between 1 and ${String(over - 1)} works.`);
+  }
+  return {
+    technique: 'soumak',
+    ...readName(fields),
+    yarn: readRole(fields),
+    over,
+    back,
+    rows: fields.number('rows', ROWS),
+    tabbyBetween: fields.number('tabbyBetween', TABBY_BETWEEN),
+    tabbyYarn: readRole(fields, 'tabbyYarn'),
+  };
+}
+
+const tabbyPicks = (band: SoumakBand): number => (band.rows - 1) * band.tabbyBetween;
+
+/** A row is as high as its yarn lies free; tabby fills the rooms between rows. */
+function height(band: SoumakBand, loom: DressedLoom): number {
+  return band.rows * threadOn(loom, band.yarn).loftMm + tabbyPicks(band) * pickSpacingOn(loom, band.tabbyYarn);
+}
+
+function check(band: SoumakBand, _heightMm: number, loom: DressedLoom, report: BandReport): void {
+  if (band.over > loom.workingEnds) {
+    report.reject('E_FIT', 'over', `The warp has ${String(loom.workingEnds)} ends to work with. Pass over fewer.`);
+    return;
+  }
+  if ((loom.workingEnds - band.over) % (band.over - band.back) !== 0) {
+    report.warn('W_SHORT_STITCH', 'over', 'The last stitch of each row comes out shorter than the others.');
+  }
+}
+
+function weave(band: SoumakBand, _heightMm: number, loom: DressedLoom): Woven {
+  const thread = threadOn(loom, band.yarn);
+  const perRow = soumakStitchesPerRow(loom.workingEnds, band.over, band.back);
+  const stitchMm = soumakStitch({ over: band.over, back: band.back, spacingMm: loom.spacingMm, diameterSumMm: loftSum(loom, thread) });
+  const soumak = rowsOf(band.yarn, 'by-the-row', band.rows, perRow * stitchMm + 2 * loom.tailMm, thread);
+  const stitches = band.rows * perRow;
+  const picks = tabbyPicks(band);
+  if (picks === 0) return { counts: { stitches }, uses: [soumak], work: { stitches } };
+  const ground = threadOn(loom, band.tabbyYarn);
+  const pickMm = pickLength(loom.workingEnds, picksOn(loom, band.tabbyYarn));
+  return {
+    picks: { role: band.tabbyYarn, rows: picks, rawRows: picks },
+    counts: { picks, stitches },
+    uses: [soumak, rowsOf(band.tabbyYarn, 'shuttle', picks, pickMm, ground)],
+    work: { rows: picks, stitches },
+  };
+}
+
+export const soumak: Technique<'soumak'> = {
+  read,
+  roles: (band) => [
+    { key: 'yarn', role: band.yarn, inPicks: false },
+    { key: 'tabbyYarn', role: band.tabbyYarn, inPicks: tabbyPicks(band) > 0 },
+  ],
+  height,
+  check,
+  weave,
+};

@@ -1,0 +1,151 @@
+/** Tabby, over one and under one, with shapes in other colours if the band has any. */
+import { areaLength } from '#core/craft/colour-areas.ts';
+import { LONGEST_SLIT_MM } from '#core/craft/defaults.ts';
+import type { BandHeight, Shape, TabbyBand } from '#core/craft/piece.ts';
+import { picksInHeight, pickLength } from '#core/craft/picks.ts';
+import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
+import { below } from '#core/craft/reading/findings.ts';
+import { heightOfShape, widthOfShape } from '#core/craft/shapes.ts';
+import {
+  areasOfRow,
+  centreInEnds,
+  longestSlitRows,
+  placeShape,
+  type BandGrid,
+  type YarnArea,
+} from '#core/craft/techniques/colour-rows.ts';
+import { LONGEST_MM, readName, readRole } from '#core/craft/techniques/read-rules.ts';
+import { readShape } from '#core/craft/techniques/read-shape.ts';
+import { picksOn, threadOn, type BandReport, type DressedLoom, type Technique, type Woven, type YarnUse } from '#core/craft/techniques/technique.ts';
+
+const MOST_SHAPES = 24;
+/** Nobody weaves more in one band; a finer beat than the yarn has was most likely mistyped. */
+const MOST_ROWS = 20_000;
+/** A band without height is woven, too: it has no rows, and says so. */
+const TABBY_HEIGHT: NumberRule = { name: 'Height of the band', min: 0, max: LONGEST_MM, unit: 'mm' };
+/** Measured by hand, heights agree no closer. */
+const CLOSE_ENOUGH_MM = 0.5;
+
+function readHeight(fields: Fields): BandHeight {
+  if (!fields.has('fill')) return { heightMm: fields.number('heightMm', TABBY_HEIGHT) };
+  if (fields.take('fill') !== true) fields.reject('E_ENUM', 'fill', 'A band that fills the rest says true here; any other leaves it out.');
+  if (fields.has('heightMm')) {
+    fields.take('heightMm');
+    fields.reject('E_ENUM', 'heightMm', 'A band has a height or fills the rest. Give one of the two.');
+  }
+  return { fill: true };
+}
+
+function readShapes(fields: Fields): { readonly shapes?: readonly Shape[] } {
+  const raw = fields.take('shapes');
+  if (raw === undefined || (Array.isArray(raw) && raw.length === 0)) return {};
+  const path = fields.pathOf('shapes');
+  const shapes = fields.list('shapes', 'Shapes', MOST_SHAPES);
+  return { shapes: shapes.map((value, index) => readShape(Fields.of(value, below(path, index), 'A shape', fields.findings))) };
+}
+
+function read(fields: Fields): TabbyBand {
+  return { technique: 'tabby', ...readName(fields), yarn: readRole(fields), ...readHeight(fields), ...readShapes(fields) };
+}
+
+function gridOf(band: TabbyBand, heightMm: number, loom: DressedLoom): BandGrid {
+  const { pickSpacingMm } = picksOn(loom, band.yarn);
+  return { rows: picksInHeight(heightMm, pickSpacingMm), ends: loom.workingEnds, spacingMm: loom.spacingMm, pickSpacingMm, widthMm: loom.widthMm };
+}
+
+/** Half an end beyond the selvedge is still inside: ends are whole. */
+function liesInside(middleEnds: number, widthEnds: number, ends: number): boolean {
+  return middleEnds - widthEnds / 2 >= -0.5 - 1e-9 && middleEnds + widthEnds / 2 <= ends + 0.5 + 1e-9;
+}
+
+function fitsAcross(shape: Shape, key: string, grid: BandGrid, report: BandReport): boolean {
+  const widthEnds = widthOfShape(shape) / grid.spacingMm;
+  const centre = centreInEnds(shape, grid);
+  const top = centre + (shape.leanMm ?? 0) / grid.spacingMm;
+  if (widthEnds > grid.ends + 0.5) {
+    const widthKey = shape.shape === 'circle' ? 'radiusMm' : 'baseMm';
+    report.reject('E_FIT', `${key}/${widthKey}`, `The shape is wider than the cloth, which takes ${report.length(grid.ends * grid.spacingMm)}.`);
+    return false;
+  }
+  if (!liesInside(centre, widthEnds, grid.ends)) {
+    report.reject('E_FIT', `${key}/centreMm`, 'The shape runs out over the selvedge. Move its middle inwards, or make it narrower.');
+    return false;
+  }
+  if (!liesInside(top, shape.shape === 'triangle' ? 0 : widthEnds, grid.ends)) {
+    report.reject('E_FIT', `${key}/leanMm`, 'The shape leans out over the selvedge. Let it lean less.');
+    return false;
+  }
+  return true;
+}
+
+function fitsUpright(shape: Shape, key: string, heightMm: number, report: BandReport): boolean {
+  const roomMm = Math.max(0, heightMm - (shape.bottomMm ?? 0));
+  if (heightOfShape(shape) <= roomMm + CLOSE_ENOUGH_MM) return true;
+  const ownKey = shape.shape === 'circle' ? 'radiusMm' : 'heightMm';
+  const which = shape.bottomMm === undefined ? ownKey : 'bottomMm';
+  report.reject('E_FIT', `${key}/${which}`, `The shape is higher than its band: from its foot to the band’s end there are ${report.length(roomMm)}.`);
+  return false;
+}
+
+function fitsIn(shape: Shape, key: string, heightMm: number, grid: BandGrid, report: BandReport): boolean {
+  return fitsAcross(shape, key, grid, report) && fitsUpright(shape, key, heightMm, report);
+}
+
+function warnOfSlit(shape: Shape, key: string, grid: BandGrid, report: BandReport): void {
+  if ((shape.join ?? 'slit') !== 'slit') return;
+  const slitMm = longestSlitRows(placeShape(shape, grid)) * grid.pickSpacingMm;
+  if (slitMm > LONGEST_SLIT_MM) {
+    report.warn('W_SLIT', `${key}/join`, `The slit at its side is ${report.length(slitMm)} long. Sew it when the piece is off the loom, or join the colours.`);
+  }
+}
+
+function check(band: TabbyBand, heightMm: number, loom: DressedLoom, report: BandReport): void {
+  const grid = gridOf(band, heightMm, loom);
+  const heightKey = band.fill === true ? 'fill' : 'heightMm';
+  if (grid.rows > MOST_ROWS) {
+    report.reject('E_RANGE', heightKey, `That would be ${String(grid.rows)} rows. Check the height, the yarn and the beat.`);
+    return;
+  }
+  if (grid.rows === 0) report.warn('W_THIN', heightKey, 'This band is thinner than one row and will not show.');
+  band.shapes?.forEach((shape, index) => {
+    const key = `shapes/${String(index)}`;
+    if (fitsIn(shape, key, heightMm, grid, report)) warnOfSlit(shape, key, grid, report);
+  });
+}
+
+/** Weft of many rows, by yarn. */
+function weaveAreas(rows: readonly (readonly YarnArea[])[], loom: DressedLoom): ReadonlyMap<string, number> {
+  const threadMm = new Map<string, number>();
+  for (const area of rows.flat()) {
+    const lengthMm = areaLength(area, picksOn(loom, area.yarn), threadOn(loom, area.yarn).compressedMm);
+    threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + lengthMm);
+  }
+  return threadMm;
+}
+
+function weave(band: TabbyBand, heightMm: number, loom: DressedLoom): Woven {
+  const grid = gridOf(band, heightMm, loom);
+  const shapes = (band.shapes ?? []).map((shape) => placeShape(shape, grid));
+  const rows = Array.from({ length: grid.rows }, (_, row) => areasOfRow(row, band.yarn, shapes, grid.ends));
+  const uses = [...weaveAreas(rows, loom)].map(([role, threadMm]): YarnUse => {
+    const rowMm = pickLength(loom.workingEnds, picksOn(loom, role));
+    return { role, carry: 'shuttle', threadMm, yarnMm: threadMm * threadOn(loom, role).strands, rowMm };
+  });
+  return {
+    picks: { role: band.yarn, rows: grid.rows, rawRows: heightMm / grid.pickSpacingMm },
+    counts: { picks: grid.rows },
+    uses,
+    work: { rows: grid.rows, colourChanges: rows.reduce((changes, areas) => changes + areas.length - 1, 0) },
+  };
+}
+
+export const tabby: Technique<'tabby'> = {
+  read,
+  roles: (band) => [
+    { key: 'yarn', role: band.yarn, inPicks: true },
+    ...(band.shapes ?? []).map((shape, index) => ({ key: `shapes/${String(index)}/yarn`, role: shape.yarn, inPicks: true })),
+  ],
+  height: (band) => (band.fill === true ? 'fill' : band.heightMm),
+  check,
+  weave,
+};

@@ -1,0 +1,121 @@
+/**
+ * What a weaving technique is to the reckoning: how its band is read, how high it
+ * comes out, what can be wrong with it on this loom, and what it takes. One technique
+ * is one file beside this one, and one line in `registry.ts`.
+ */
+import type { BandByTechnique, Beat, TechniqueName } from '#core/craft/piece.ts';
+import { pickSpacing, type PickGeometry } from '#core/craft/picks.ts';
+import type { Fields } from '#core/craft/reading/fields.ts';
+import type { ErrorCode, WarningCode } from '#core/craft/reading/findings.ts';
+import type { Work } from '#core/craft/time.ts';
+import type { Thread } from '#core/craft/yarn/thread.ts';
+
+/** The dressed loom, as far as weaving needs to know it. */
+export interface DressedLoom {
+  readonly workingEnds: number;
+  /** Between working ends. */
+  readonly spacingMm: number;
+  /** Compressed, of a working end. */
+  readonly warpDiameterMm: number;
+  /** Finished width of the cloth. */
+  readonly widthMm: number;
+  readonly beat: Beat;
+  readonly tailMm: number;
+  /** By yarn role. */
+  readonly threads: ReadonlyMap<string, Thread>;
+  /** By yarn role, where picks of that yarn can be woven at all. */
+  readonly picks: ReadonlyMap<string, PickGeometry>;
+}
+
+/**
+ * How yarn comes to the loom: wound on a shuttle or butterfly, which costs two tails a
+ * load; laid in row by row, tails already counted; or cut into strands.
+ */
+export type Carry = 'shuttle' | 'by-the-row' | 'cut';
+
+export interface YarnUse {
+  readonly role: string;
+  readonly carry: Carry;
+  /** The thread as it lies, all its strands together. */
+  readonly threadMm: number;
+  /** Yarn it takes: the thread's length times its strands. */
+  readonly yarnMm: number;
+  /** The thread of one whole row, where there are rows a load can last for. */
+  readonly rowMm?: number;
+}
+
+/** Rows of tabby with one ground yarn. */
+export interface PickRun {
+  readonly role: string;
+  readonly rows: number;
+  /** Before rounding to whole rows. */
+  readonly rawRows: number;
+}
+
+/** What one band takes. */
+export interface Woven {
+  readonly picks?: PickRun;
+  readonly counts: {
+    readonly picks?: number;
+    readonly stitches?: number;
+    readonly knots?: number;
+    readonly strands?: number;
+    readonly cutMm?: number;
+  };
+  readonly uses: readonly YarnUse[];
+  readonly work: Partial<Work>;
+}
+
+/** Where a technique says what is wrong with its band; `key` is a path below the band, such as `over`. */
+export interface BandReport {
+  reject(code: ErrorCode, key: string, message: string): void;
+  warn(code: WarningCode, key: string, message: string): void;
+  /** A length in the person's own units. */
+  length(mm: number): string;
+}
+
+/** A yarn role a band names, and the path below the band where it does. */
+export interface NamedRole {
+  readonly key: string;
+  readonly role: string;
+  /** Picks of it are woven, so it must close between the ends. */
+  readonly inPicks: boolean;
+}
+
+export interface Technique<N extends TechniqueName> {
+  /** Reads its band; keys that nobody read are refused by the caller. */
+  read(fields: Fields): BandByTechnique[N];
+  roles(band: BandByTechnique[N]): readonly NamedRole[];
+  height(band: BandByTechnique[N], loom: DressedLoom): number | 'fill';
+  check(band: BandByTechnique[N], heightMm: number, loom: DressedLoom, report: BandReport): void;
+  weave(band: BandByTechnique[N], heightMm: number, loom: DressedLoom): Woven;
+}
+
+/** @throws if the role is not among the loom's threads, which reading the piece has ruled out */
+export function threadOn(loom: DressedLoom, role: string): Thread {
+  const thread = loom.threads.get(role);
+  if (thread === undefined) throw new Error(`no yarn in the role ${role}`);
+  return thread;
+}
+
+/** @throws if picks of that yarn jam, which must have been refused before */
+export function picksOn(loom: DressedLoom, role: string): PickGeometry {
+  const geometry = loom.picks.get(role);
+  if (geometry === undefined) throw new Error(`no picks of the yarn ${role}`);
+  return geometry;
+}
+
+export function pickSpacingOn(loom: DressedLoom, role: string): number {
+  return pickSpacing(loom.beat, threadOn(loom, role).compressedMm);
+}
+
+/** D with the yarn lying free: warp and loft of the weft. */
+export function loftSum(loom: DressedLoom, thread: Thread): number {
+  return loom.warpDiameterMm + thread.loftMm;
+}
+
+/** So many rows of one length each. */
+export function rowsOf(role: string, carry: Carry, rows: number, rowMm: number, thread: Thread): YarnUse {
+  const threadMm = rows * rowMm;
+  return { role, carry, threadMm, yarnMm: threadMm * thread.strands, rowMm };
+}
