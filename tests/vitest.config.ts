@@ -1,24 +1,36 @@
-// Four kinds of test, each with the surroundings it needs. tests/browser has its own runner.
+/**
+ * Four kinds of test, each with the surroundings it needs; tests/browser has its own runner.
+ * `npm test -- unit` runs one kind; `npx vitest run --config tests/vitest.config.ts --project server tests/server/db` one folder.
+ */
 import { defineConfig } from 'vitest/config';
 
 const root = new URL('..', import.meta.url).pathname;
+const shared = {
+  root,
+  /** A zone far from UTC with daylight saving, so that a mistaken local time shows. */
+  env: { TZ: 'America/New_York' },
+  maxWorkers: 2,
+};
+/** These talk to the outside or stand at the door, and need no database. */
+const withoutDatabase = 'tests/server/{payments,stand-ins,mail,web/front}/**/*.test.ts';
 
 export default defineConfig({
   root,
   test: {
     projects: [
-      { test: { name: 'unit', root, include: ['tests/unit/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' } },
+      { test: { name: 'unit', ...shared, include: ['tests/unit/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' } },
+      { test: { name: 'islands', ...shared, include: ['tests/islands/**/*.test.{ts,tsx}'], environment: 'jsdom' } },
       {
         test: {
-          name: 'server', root, environment: 'node',
+          name: 'server', ...shared, environment: 'node',
           include: ['tests/server/**/*.test.ts'],
-          exclude: ['tests/server/{payments,stand-ins,mail,web/front}/**'],
+          exclude: [withoutDatabase],
+          globalSetup: ['tests/support/database-server.ts'],
           setupFiles: ['tests/support/server-setup.ts'],
-          pool: 'forks', maxWorkers: 2, isolate: true, testTimeout: 20_000, hookTimeout: 60_000,
+          pool: 'forks', isolate: true, testTimeout: 20_000, hookTimeout: 60_000,
         },
       },
-      // What talks to the outside, against the stand-ins; no database.
-      { test: { name: 'stand-ins', root, include: ['tests/server/{payments,stand-ins,mail}/**/*.test.ts'], environment: 'node' } },
+      { test: { name: 'edge', ...shared, include: [withoutDatabase], environment: 'node' } },
     ],
   },
 });

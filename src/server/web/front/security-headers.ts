@@ -1,0 +1,33 @@
+/** Headers that every answer carries, whoever wrote it: pages, files, refusals, 304 and 500 alike. */
+import type { Handler } from '#server/web/front/handler.ts';
+import { gateOf } from '#server/web/front/response-gate.ts';
+
+export const SECURITY_HEADERS: Readonly<Record<string, string>> = {
+  // Browsers heed it over https only; a proxy may reach us by plain http, so it is always there.
+  'Strict-Transport-Security': 'max-age=31536000; includeSubDomains',
+  'X-Content-Type-Options': 'nosniff',
+  'Referrer-Policy': 'strict-origin-when-cross-origin',
+  'Permissions-Policy': 'camera=(self), microphone=(), geolocation=()',
+  'Cross-Origin-Opener-Policy': 'same-origin',
+  'Cross-Origin-Resource-Policy': 'same-origin',
+};
+
+/** What a page that brings no policy of its own may do: everything from here, nothing from elsewhere, in nobody's frame. */
+const FALLBACK_POLICY = "default-src 'self'; base-uri 'none'; object-src 'none'; frame-ancestors 'none'";
+
+/** @param fallbackPolicy whether answers without a policy get one; the development server's own inline parts need none */
+export function securityHeaders(fallbackPolicy: boolean): Handler {
+  return (_request, response, next) => {
+    for (const [name, value] of Object.entries(SECURITY_HEADERS)) response.setHeader(name, value);
+    gateOf(response).beforeHead((head) => {
+      head.removeHeader('X-Powered-By');
+      const type = head.getHeader('content-type');
+      if (typeof type === 'string' && /^text\/html\b/i.test(type) && !/charset=/i.test(type)) {
+        head.setHeader('Content-Type', 'text/html; charset=utf-8');
+      }
+      if (fallbackPolicy && !head.hasHeader('content-security-policy')) head.setHeader('Content-Security-Policy', FALLBACK_POLICY);
+      return undefined;
+    });
+    next();
+  };
+}
