@@ -11,8 +11,8 @@ const shared = {
   env: { TZ: 'America/New_York' },
   maxWorkers: 2,
 };
-/** These talk to the outside or stand at the door, and need no database. */
-const withoutDatabase = 'tests/server/{payments,stand-ins,mail,web/front}/**/*.test.ts';
+/** These talk to the outside, stand at the door or run beside, and need no database. */
+const withoutDatabase = 'tests/server/{payments,stand-ins,mail,lesson-text,web/front}/**/*.test.ts';
 
 export default defineConfig({
   root,
