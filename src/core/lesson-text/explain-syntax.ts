@@ -9,10 +9,13 @@ interface ParserMessage {
   column: number;
 }
 
-/** The problem behind an error thrown by the parser; anything else than a parser's message is thrown on. */
+/**
+ * The problem behind an error thrown by the parser. Besides its messages it has assertions of its own, which some
+ * tangled tags set off in development builds before the message comes: those refuse the text as well.
+ */
 export function explainSyntaxError(error: unknown, source: string): LessonProblem {
   const message = parserMessage(error);
-  if (message === undefined) throw error;
+  if (message === undefined) return { line: 1, column: 1, code: 'markup', reason: 'The text cannot be read as it is. Look for a tag that is opened but not closed, and for headings and tables inside tags.' };
   const { line, column } = message;
   const brace = message.reason.includes('corresponding closing brace') || message.reason.includes('in expression');
   if (brace) {

@@ -1,6 +1,7 @@
 // Every pattern and loop that meets a writer's characters one by one, with a hundred thousand of the worst of them.
 import { describe, expect, test } from 'vitest';
-import { isAmountKey, isName, readAttributeValue } from '#core/lesson-text/attribute-value.ts';
+import { isAmountKey } from '#core/lesson-text/amount-key.ts';
+import { isName, readAttributeValue } from '#core/lesson-text/attribute-value.ts';
 import { findBadCharacter } from '#core/lesson-text/characters.ts';
 import { explainSyntaxError } from '#core/lesson-text/explain-syntax.ts';
 import { checkLinkAddress } from '#core/lesson-text/link-address.ts';

@@ -155,6 +155,9 @@ describe('what a writer is told', () => {
     ['an amount in a heading', '## Wind <Amount of="ends"/>', /^1:9 <Amount> cannot stand in a heading/],
     ['an amount in a link', '[take <Amount of="warp"/>](/a)', /^1:7 <Amount> cannot stand in a link/],
     ['an unknown figure', '<Figure of="rug"/>', /^1:9 "of" of <Figure> does not work\. Choose one of these: warping, /],
+    ['an amount no plan has', '<Amount of="warpp"/>', /^1:9 "of" of <Amount> does not work\. No plan has an amount of that name/],
+    ['an amount of a yarn without its role', '<Amount of="yarn"/>', /No plan has an amount of that name/],
+    ['an amount of an inherited name', '<Amount of="constructor"/>', /No plan has an amount of that name/],
     ['a heading in a component', '<Tip title="x">\n## Words\n</Tip>', /^2:1 A heading stands at the left edge/],
     ['a heading of five signs', '##### Small', /^1:1 Headings go from ## to ####/],
     ['a heading without words', '##', /^1:1 The heading has no words/],
@@ -169,6 +172,7 @@ describe('what a writer is told', () => {
     ['an address in angle brackets', 'See <https://a.example>.', /Write it as a link: \[what it is\]\(https:/],
     ['a brace left open', 'Take {38 ends', /A curly brace opens here or above and is not closed/],
     ['a smaller-than sign before a number', 'If <3 it fits.', /^1:5 After < comes the name of a component.*Write \\< if you mean the sign itself\.$/],
+    ['a tag that tangles with a heading', '<script>| a |\n| - |\n---', /./],
     ['a component across a list', '- <Tip title="x">\n\nwords\n\n</Tip>', /is opened but not closed where it should be/],
   ])('%s', (_what, source, reason) => {
     expect(problemsOf(source)[0]).toMatch(reason);
