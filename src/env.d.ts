@@ -8,6 +8,6 @@ declare namespace App {
     /** A sentence left by the page before: what was done. */
     said: string | null;
     /** Why this request was refused, for the page that says so. */
-    refusal?: { status: number; says: string | null; requestId: string };
+    refusal?: { status: number; says: string; requestId: string };
   }
 }

@@ -16,7 +16,7 @@ import type { FormAnswer } from '#server/web/form.ts';
 import { gate } from '#server/web/gate.ts';
 import { comesFromOwnPages, ownOrigins } from '#server/web/origin.ts';
 import { cacheRule, completePolicy } from '#server/web/page-headers.ts';
-import { problem } from '#server/web/respond.ts';
+import { knownError, problem } from '#server/web/respond.ts';
 import { ROUTE_RULES } from '#server/web/route-rules.ts';
 
 const SAID = 'said';
@@ -83,18 +83,18 @@ function withHeaders(response: Response, signedIn: boolean): Response {
 }
 
 async function pageForError(context: APIContext, error: unknown, requestId: string): Promise<Response> {
-  const known = error instanceof AppError ? error : null;
-  if (known?.code === 'UNAUTHENTICATED') {
+  const known = knownError(error);
+  if (known.code === 'UNAUTHENTICATED') {
     const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : '/';
     return context.redirect(`/sign-in?to=${encodeURIComponent(back)}`, 303);
   }
   // An empty 404 makes Astro show its 404 page.
-  if (known?.code === 'NOT_FOUND' || known?.code === 'GONE') return new Response(null, { status: 404 });
-  context.locals.refusal = { status: known?.status ?? 500, says: known?.says ?? null, requestId };
-  if (known === null || known.code === 'BUG') console.error(JSON.stringify({ level: 'error', requestId, path: context.routePattern, message: error instanceof Error ? error.stack : String(error) }));
+  if (known.code === 'NOT_FOUND' || known.code === 'GONE') return new Response(null, { status: 404 });
+  context.locals.refusal = { status: known.status, says: known.says, requestId };
+  if (known.code === 'BUG') console.error(JSON.stringify({ level: 'error', requestId, path: context.routePattern, message: error instanceof Error ? error.stack : String(error) }));
   try {
     const page = await context.rewrite(new Request(new URL('/refused', context.url), { method: 'GET', headers: { accept: 'text/html' } }));
-    return withHeaders(new Response(page.body, { status: known?.status ?? 500, headers: page.headers }), true);
+    return withHeaders(new Response(page.body, { status: known.status, headers: page.headers }), true);
   } catch {
     return new Response(null, { status: 500 });
   }

@@ -3,6 +3,7 @@
  * Read once, on first use, so that a build needs no database; nonsense stops the process with every wrong name told.
  */
 import { z } from 'astro/zod';
+import { LIVE_HOST, problemsOfPaymentSettings } from '#server/payments/payment-settings.ts';
 
 const flag = z.enum(['on', 'off']).transform((word) => word === 'on');
 const port = z.coerce.number().int().min(1).max(65_000);
@@ -22,8 +23,8 @@ const Settings = z.object({
   FELLMARK_SMTP_URL: url.optional(),
   FELLMARK_MAIL_FROM: z.string().email().default('hello@fellmark.example'),
   FELLMARK_PAYMENTS_URL: url.optional(),
-  FELLMARK_PAYMENTS_KEY: z.string().min(8).optional(),
-  FELLMARK_PAYMENTS_WEBHOOK_SECRETS: z.string().min(8).optional(),
+  FELLMARK_PAYMENTS_KEY: z.string(),
+  FELLMARK_PAYMENTS_WEBHOOK_SECRETS: z.string().default(''),
   FELLMARK_SECRET: z.string().min(32),
   FELLMARK_TRUSTED_PROXIES: z.string().default(''),
 });
@@ -73,6 +74,14 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
   if (address.protocol !== 'https:' && !LOOPBACK.has(address.hostname)) {
     throw new SettingsError('FELLMARK_PUBLIC_URL: an address that others reach must begin with https, or passwords travel in the open');
   }
+  const webhookSecrets = listOf(s.FELLMARK_PAYMENTS_WEBHOOK_SECRETS);
+  const payments = problemsOfPaymentSettings({
+    secretKey: s.FELLMARK_PAYMENTS_KEY,
+    host: s.FELLMARK_PAYMENTS_URL === undefined ? LIVE_HOST : new URL(s.FELLMARK_PAYMENTS_URL).hostname,
+    production: s.FELLMARK_MODE === 'production' && !s.FELLMARK_DEMO,
+    webhookSecrets,
+  });
+  if (payments.length > 0) throw new SettingsError(`FELLMARK_PAYMENTS_…: ${payments.join('. ')}.`);
   return Object.freeze({
     mode: s.FELLMARK_MODE,
     port: s.FELLMARK_PORT,
@@ -95,12 +104,16 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     mailFrom: s.FELLMARK_MAIL_FROM,
     payments: {
       url: s.FELLMARK_PAYMENTS_URL,
-      key: s.FELLMARK_PAYMENTS_KEY ?? '',
-      webhookSecrets: (s.FELLMARK_PAYMENTS_WEBHOOK_SECRETS ?? '').split(',').filter((secret) => secret !== ''),
+      key: s.FELLMARK_PAYMENTS_KEY,
+      webhookSecrets,
     },
     secret: s.FELLMARK_SECRET,
-    trustedProxies: s.FELLMARK_TRUSTED_PROXIES.split(',').map((hop) => hop.trim()).filter((hop) => hop !== ''),
+    trustedProxies: listOf(s.FELLMARK_TRUSTED_PROXIES),
   });
+}
+
+function listOf(words: string): string[] {
+  return words.split(',').map((word) => word.trim()).filter((word) => word !== '');
 }
 
 let kept: Config | undefined;

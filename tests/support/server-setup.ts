@@ -2,15 +2,19 @@
  * Before the tests of a worker: its own database on the running MariaDB, at the newest schema, and settings that point at it.
  * Between tests every row goes; tests open their own transactions, so none can be wrapped around them.
  */
+import { createHash } from 'node:crypto';
 import { mkdtempSync } from 'node:fs';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import * as mariadb from 'mariadb';
 import { afterAll, beforeAll, beforeEach } from 'vitest';
+import { migrations } from '#server/db/migrations/index.ts';
 
 const server = process.env.FELLMARK_TEST_DATABASE_URL;
 if (server === undefined) throw new Error('FELLMARK_TEST_DATABASE_URL must name a MariaDB server on which databases may be made');
-const name = `fellmark_test_${process.env.FELLMARK_TEST_RUN ?? 'local'}_${process.env.VITEST_POOL_ID ?? '1'}`;
+// A schema that was edited gets a database of its own; an old one is never half right.
+const schema = createHash('sha256').update(JSON.stringify(migrations)).digest('hex').slice(0, 8);
+const name = `fellmark_test_${process.env.FELLMARK_TEST_RUN ?? 'local'}_${process.env.VITEST_POOL_ID ?? '1'}_${schema}`;
 
 Object.assign(process.env, {
   TZ: 'America/New_York',

@@ -24,39 +24,36 @@ export type Standing =
   | { readonly open: false; readonly until: 'date'; readonly opensAt: Date }
   | { readonly open: false; readonly until: 'verdict'; readonly lesson: string };
 
+const MINUTE_MS = 60_000;
 const DAY_MS = 86_400_000;
 
 /**
- * The instant of a wall-clock time in a zone. A time that a change of clocks skips counts as the next valid minute,
+ * The instant of a wall-clock time in a zone. A time that a change of clocks skips counts as the next minute there is,
  * one that comes twice as the first of the two.
  * @returns null when the wall time or the zone is not one.
  */
 export function instantOfWall(wall: string, zone: string): Date | null {
   if (!/^\d{4}-\d{2}-\d{2}T\d{2}:\d{2}$/.test(wall) || !IANAZone.isValidZone(zone)) return null;
-  const asked = DateTime.fromISO(wall, { zone });
-  if (!asked.isValid) return null;
-  if (asked.toFormat("yyyy-MM-dd'T'HH:mm") !== wall) {
-    // The clock jumped over the asked time: the first minute that exists is the jump itself.
-    const before = DateTime.fromISO(wall, { zone: 'UTC' }).minus({ minutes: asked.minus({ hours: 3 }).offset }).toUTC();
-    const jump = firstOffsetChange(before.minus({ hours: 3 }), zone);
-    return jump ?? asked.toJSDate();
-  }
-  const earlier = asked.minus({ hours: 1 });
-  return earlier.toFormat("yyyy-MM-dd'T'HH:mm") === wall ? earlier.toJSDate() : asked.toJSDate();
+  const asIfUtc = DateTime.fromISO(wall, { zone: 'UTC' });
+  if (!asIfUtc.isValid) return null;
+  const clock = IANAZone.create(zone);
+  const at = asIfUtc.toMillis();
+  // The offsets a day before and a day after are the only ones the wall time can have been meant in.
+  const meant = [at - DAY_MS, at + DAY_MS].map((around) => ({ offset: clock.offset(around), instant: at - clock.offset(around) * MINUTE_MS }));
+  const real = meant.filter(({ offset, instant }) => clock.offset(instant) === offset).map(({ instant }) => instant);
+  const instants = meant.map(({ instant }) => instant);
+  return new Date(real.length > 0 ? Math.min(...real) : changeBetween(clock, Math.min(...instants), Math.max(...instants)));
 }
 
-/** The first instant after `from`, within six hours, at which the zone's offset differs; by bisection to the minute. */
-function firstOffsetChange(from: DateTime, zone: string): Date | null {
-  const offsetAt = (minutes: number): number => from.plus({ minutes }).setZone(zone).offset;
-  let low = 0;
-  let high = 360;
-  if (offsetAt(low) === offsetAt(high)) return null;
-  while (high - low > 1) {
-    const middle = Math.floor((low + high) / 2);
-    if (offsetAt(middle) === offsetAt(low)) low = middle;
-    else high = middle;
+/** The minute at which the offset of `clock` changes between two instants that have different offsets. */
+function changeBetween(clock: IANAZone, from: number, to: number): number {
+  let [before, after] = [from, to];
+  while (after - before > MINUTE_MS) {
+    const middle = before + Math.floor((after - before) / 2 / MINUTE_MS) * MINUTE_MS;
+    if (clock.offset(middle) === clock.offset(before)) before = middle;
+    else after = middle;
   }
-  return from.plus({ minutes: high }).toJSDate();
+  return after;
 }
 
 /** Whether a part with `rule` is open to the student of `facts`, and if not, what it waits for. */

@@ -37,7 +37,7 @@ Order.init({
   attempt: count(1),
   checkoutParameters: json(),
   sessionId: maybeText(255),
-  payUrl: { type: DataTypes.TEXT, allowNull: true },
+  payUrl: { type: DataTypes.TEXT, allowNull: true, defaultValue: null },
   paymentIntentId: maybeText(255),
   terms: json(),
   receiptNumber: maybeRef(),

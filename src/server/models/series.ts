@@ -34,7 +34,7 @@ Series.init({
   summary: { ...text(400), defaultValue: '' },
   story: longText(),
   techniques: { ...json(), defaultValue: [] },
-  priceMinor: { type: DataTypes.BIGINT, allowNull: true },
+  priceMinor: { type: DataTypes.BIGINT, allowNull: true, defaultValue: null },
   currency: { ...text(3), defaultValue: 'EUR' },
   state: oneOf(['draft', 'published'], 'draft'),
   publishedAt: maybeMoment(),
