@@ -1,87 +1,47 @@
 // The series that ship with the program: complete enough to teach from, and told the way the loom side needs them.
-import { readdirSync, readFileSync } from 'node:fs';
+import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parse } from 'yaml';
-import { z } from 'astro/zod';
+import { SeriesFile } from '#contracts/series-folder.ts';
+import { parseLessonText, type LessonText } from '#core/lesson-text/parse-lesson-text.ts';
+import { plainWords } from '#core/lesson-text/plain-text.ts';
+import type { Block, Component, LessonNode } from '#core/lesson-text/tree.ts';
 
-const root = new URL('../../../content/series/', import.meta.url);
+const content = new URL('../../../content/', import.meta.url);
+const folders = readdirSync(new URL('series/', content));
 
-const Name = z.string().regex(/^[a-z0-9][a-z0-9-]{0,63}$/);
-
-const Gathering = z
-  .object({
-    kind: z.enum(['tool', 'yarn', 'material']),
-    name: z.string().min(3).max(80),
-    amount: z.string().optional(),
-    amountText: z.string().min(1).optional(),
-    standIn: z.string().min(3).optional(),
-    untilPart: z.number().int().min(1),
-    note: z.string().min(3).optional(),
-  })
-  .strict()
-  .refine((item) => (item.amount === undefined) !== (item.amountText === undefined), 'an amount from the plan or in words, not both');
-
-const Opens = z.discriminatedUnion('rule', [
-  z.object({ rule: z.literal('at-once') }).strict(),
-  z.object({ rule: z.literal('on-date'), wall: z.string(), zone: z.string() }).strict(),
-  z.object({ rule: z.literal('after-seat'), days: z.number().int().min(0) }).strict(),
-  z.object({ rule: z.literal('after-verdict'), part: z.number().int().min(1) }).strict(),
-]);
-
-const Lesson = z
-  .object({
-    file: z.string().regex(/^\d\d-[a-z0-9-]+\.mdx$/),
-    title: z.string().min(3),
-    minutes: z.number().int().min(10),
-    preview: z.boolean(),
-    opens: Opens,
-    checkpoint: z.object({ ask: z.string().min(3), look: z.array(z.string().min(10)).min(3).max(5) }).strict().optional(),
-    gathering: z.array(Gathering).min(5),
-  })
-  .strict();
-
-const Series = z
-  .object({
-    title: z.string(),
-    craft: z.string(),
-    techniques: z.array(z.string()).min(1),
-    level: z.enum(['beginner', 'some practice', 'practised']),
-    summary: z.string().max(300),
-    story: z.string().min(200),
-    price: z.object({ amountMinor: z.number().int().positive(), currency: z.literal('EUR') }).strict(),
-    lessons: z.array(Lesson).min(1),
-    videos: z.array(z.object({ name: Name, title: z.string(), file: z.string() }).strict()),
-  })
-  .strict();
-
-function read(path: string): string {
-  return readFileSync(new URL(path, root), 'utf8');
+function read(folder: string, file: string): string {
+  return readFileSync(new URL(`series/${folder}/${file}`, content), 'utf8');
 }
 
-function seriesOf(folder: string): z.infer<typeof Series> {
-  return Series.parse(parse(read(`${folder}/series.yaml`)));
+function seriesOf(folder: string): SeriesFile {
+  return SeriesFile.parse(parse(read(folder, 'series.yaml')));
 }
 
-/** The attribute values of every such component in a lesson's source. */
-function valuesOf(source: string, component: string, attribute: string): string[] {
-  return [...source.matchAll(new RegExp(`<${component}\\s[^>]*?${attribute}="([^"]*)"`, 'gu'))].map((match) => match[1] ?? '');
+function lessonOf(folder: string, file: string): LessonText {
+  const lesson = parseLessonText(read(folder, file));
+  if (!lesson.ok) throw new Error(lesson.problems.map(({ line, reason }) => `${file}, line ${String(line)}: ${reason}`).join('\n'));
+  return lesson;
 }
 
-/** The words of each step as the loom side shows them; an amount counts as two words, a number and its unit. */
-function stepsOf(source: string): { id: string; words: number }[] {
-  return [...source.matchAll(/<Step id="([^"]+)">\n([\s\S]*?)\n<\/Step>/gu)].map((match) => ({
-    id: match[1] ?? '',
-    words: (match[2] ?? '').replaceAll(/<Amount[^>]*\/>/gu, 'number unit').split(/\s+/u).filter((word) => word !== '').length,
-  }));
+/** Words as they are read: an amount is a number and a unit. */
+function wordsIn(nodes: readonly LessonNode[]): string[] {
+  return plainWords(nodes, () => ' number unit ').split(/\s+/u).filter((word) => word !== '');
 }
 
-const folders = readdirSync(root);
+function componentsNamed(blocks: readonly Block[], name: Component['name']): Component[] {
+  return blocks.filter((block): block is Component => block.type === 'component' && block.name === name);
+}
+
+function linksIn(nodes: readonly LessonNode[]): string[] {
+  return nodes.flatMap((node) => [...(node.type === 'link' ? [node.url] : []), ...('children' in node ? linksIn(node.children) : [])]);
+}
 
 describe.each(folders)('the series in %s', (folder) => {
   const series = seriesOf(folder);
 
   test('names a file for every part, in the order of their numbers', () => {
-    const files = readdirSync(new URL(`${folder}/`, root)).filter((file) => file.endsWith('.mdx'));
+    const files = readdirSync(new URL(`series/${folder}/`, content)).filter((file) => file.endsWith('.mdx'));
     expect(series.lessons.map((lesson) => lesson.file)).toEqual(files.sort());
     series.lessons.forEach((lesson, index) => expect(Number(lesson.file.slice(0, 2))).toBe(index + 1));
   });
@@ -98,31 +58,32 @@ describe.each(folders)('the series in %s', (folder) => {
     });
   });
 
-  test('needs no thing until a part before the one it is gathered for, nor after the last one planned', () => {
+  test('says of each thing to gather how much of it, and until which part', () => {
     series.lessons.forEach((lesson, index) => {
-      for (const item of lesson.gathering) expect(item.untilPart, item.name).toBeGreaterThanOrEqual(index + 1);
+      expect(lesson.gathering.length, lesson.title).toBeGreaterThanOrEqual(5);
+      for (const item of lesson.gathering) {
+        expect([item.amount, item.amountText].filter((amount) => amount !== undefined), item.name).toHaveLength(1);
+        expect(item.untilPart, item.name).toBeGreaterThanOrEqual(index + 1);
+      }
     });
   });
 
-  test('puts every yarn in with what can stand in for it', () => {
+  test('says of every yarn what can stand in for it', () => {
     const yarns = series.lessons.flatMap((lesson) => lesson.gathering).filter((item) => item.kind === 'yarn');
     for (const yarn of yarns) expect(yarn.standIn, yarn.name).toBeDefined();
   });
 
-  test.each(series.lessons)('$file has steps short enough to read at the loom', ({ file }) => {
-    const steps = stepsOf(read(`${folder}/${file}`));
-    expect(steps.length).toBe(read(`${folder}/${file}`).split('<Step ').length - 1);
-    for (const step of steps) expect(step.words, step.id).toBeLessThanOrEqual(18);
-    expect(new Set(steps.map((step) => step.id)).size).toBe(steps.length);
+  test.each(series.lessons)('$file reads without a problem or a warning', ({ file }) => {
+    expect(lessonOf(folder, file).warnings).toEqual([]);
   });
 
-  test.each(series.lessons)('$file holds nothing a lesson text may not hold', ({ file }) => {
-    const source = read(`${folder}/${file}`);
-    expect(source).not.toMatch(/[{}]/u);
-    expect(source).not.toMatch(/^(import|export) /mu);
-    expect(source).not.toMatch(/<(?!\/?(Step|Caution|Tip|Amount|Figure|Video)\b)/u);
-    expect(source).not.toMatch(/^# /mu);
-    expect(source).not.toMatch(/[!…“”]|e\.g\.|etc\./u);
+  test.each(series.lessons)('$file has steps short enough to read at the loom', ({ file }) => {
+    const steps = componentsNamed(lessonOf(folder, file).tree.children, 'Step');
+    for (const step of steps) expect(wordsIn(step.children).length, step.props['id']).toBeLessThanOrEqual(18);
+  });
+
+  test.each(series.lessons)('$file keeps to the words of the house', ({ file }) => {
+    expect(read(folder, file)).not.toMatch(/[!…“”″—]|e\.g\.|etc\.|approx|\bfix(es|ed)?\b/u);
   });
 });
 
@@ -134,46 +95,50 @@ describe('Low Tide', () => {
     expect(series.price).toEqual({ amountMinor: 6800, currency: 'EUR' });
   });
 
-  test('asks for photos of the warped loom and of the slopes, and waits for both verdicts', () => {
+  test('asks for photos of the warped loom and of the slopes, and holds back what comes after them', () => {
     expect(series.lessons.flatMap((lesson, index) => (lesson.checkpoint ? [index + 1] : []))).toEqual([2, 5]);
-    expect(series.lessons.map((lesson) => lesson.opens)).toEqual([
-      { rule: 'at-once' },
-      { rule: 'at-once' },
-      { rule: 'after-verdict', part: 2 },
-      { rule: 'after-verdict', part: 2 },
-      { rule: 'after-verdict', part: 2 },
-      { rule: 'after-verdict', part: 5 },
-      { rule: 'after-verdict', part: 5 },
-    ]);
+    expect(series.lessons.map(({ opens }) => (opens.rule === 'after-verdict' ? opens.part : opens.rule))).toEqual(['at-once', 'at-once', 2, 2, 2, 5, 5]);
+    for (const { checkpoint } of series.lessons) if (checkpoint) expect(checkpoint.look.length).toBeGreaterThanOrEqual(3);
   });
 
-  test.each(series.lessons)('$file is a whole lesson: film, figures, caution, faults, end', ({ file }) => {
-    const source = read(`low-tide/${file}`);
-    const words = source.replaceAll(/<Amount[^>]*\/>/gu, 'number unit').replaceAll(/<[^>]*>|[|#*-]/gu, ' ').split(/\s+/u).filter(Boolean).length;
+  test.each(series.lessons)('$file is a whole lesson: film first, then steps, figures, faults and an end', ({ file }) => {
+    const { tree, steps, figures, outline } = lessonOf('low-tide', file);
+    const words = wordsIn(tree.children).length;
     expect(words).toBeGreaterThanOrEqual(900);
     expect(words).toBeLessThanOrEqual(1500);
-    const steps = stepsOf(source).length;
-    expect(steps).toBeGreaterThanOrEqual(8);
-    expect(steps).toBeLessThanOrEqual(16);
-    expect(valuesOf(source, 'Figure', 'of').length).toBeGreaterThanOrEqual(2);
-    expect(source.startsWith('<Video name="')).toBe(true);
-    expect(source).toMatch(/<Caution title="[^"]+">/u);
-    expect(source).toMatch(/^## .*mend/mu);
-    expect(source).toMatch(/^## When to stop|^## Show your/mu);
+    expect(steps.length).toBeGreaterThanOrEqual(8);
+    expect(steps.length).toBeLessThanOrEqual(16);
+    expect(figures.length).toBeGreaterThanOrEqual(2);
+    expect(tree.children[0]).toMatchObject({ type: 'component', name: 'Video' });
+    const headings = outline.map((entry) => entry.words);
+    expect(headings.some((heading) => heading.startsWith('What'))).toBe(true);
+    expect(headings.some((heading) => heading.includes('mend'))).toBe(true);
+    expect(headings.some((heading) => heading.startsWith('When to stop') || heading.startsWith('Show your'))).toBe(true);
   });
 
   test('shows in each part a film the series has, and uses every film', () => {
-    const shown = series.lessons.flatMap(({ file }) => valuesOf(read(`low-tide/${file}`), 'Video', 'name'));
+    const shown = series.lessons.flatMap(({ file }) => lessonOf('low-tide', file).media.map((media) => media.name));
     expect(shown).toEqual(series.videos.map((video) => video.name));
   });
 
-  test('closes every caution with what it is worth and who to ask', () => {
-    for (const { file } of series.lessons) {
-      const cautions = [...read(`low-tide/${file}`).matchAll(/<Caution[^>]*>([\s\S]*?)<\/Caution>/gu)].map((match) => match[1] ?? '');
-      for (const caution of cautions) {
-        expect(caution, file).toMatch(/general information/u);
-        expect(caution, file).toMatch(/qualified person|doctor/u);
-      }
+  test.each(series.lessons)('$file puts its caution before a step, and says whom to ask', ({ file }) => {
+    const blocks = lessonOf('low-tide', file).tree.children;
+    const cautions = componentsNamed(blocks, 'Caution');
+    expect(cautions.length).toBeGreaterThanOrEqual(1);
+    for (const caution of cautions) {
+      const after = blocks.slice(blocks.indexOf(caution) + 1);
+      expect(componentsNamed(after, 'Step').length).toBeGreaterThan(0);
+      expect(plainWords(caution.children)).toMatch(/general information/u);
+      expect(plainWords(caution.children)).toMatch(/qualified person|doctor/u);
+    }
+  });
+
+  test('links only to handbook pages that are there', () => {
+    const links = series.lessons.flatMap(({ file }) => linksIn(lessonOf('low-tide', file).tree.children));
+    expect(links.length).toBeGreaterThan(5);
+    for (const link of links) {
+      expect(link).toMatch(/^\/handbook\/[a-z-]+$/u);
+      expect(existsSync(new URL(`${link.slice(1)}.mdx`, content)), link).toBe(true);
     }
   });
 });
