@@ -1,5 +1,6 @@
 /** Every letter the house writes, by name. A template's data is checked when the letter is written and again when it is sent. */
 import type { z } from 'astro/zod';
+import { verdict } from './bench.ts';
 import { seatBought } from './checkout.ts';
 import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
 
@@ -9,6 +10,7 @@ export const TEMPLATES = {
   'new-password': newPassword,
   'password-changed': passwordChanged,
   'seat-bought': seatBought,
+  verdict,
 } as const;
 
 export type TemplateName = keyof typeof TEMPLATES;

@@ -1,0 +1,59 @@
+import type { VerdictInput } from '#contracts/bench.ts';
+import { audit } from '#server/audit.ts';
+import type { Context } from '#server/context.ts';
+import { withTransaction } from '#server/db/transaction.ts';
+import { AppError, authorize, found } from '#server/errors.ts';
+import { postLetter } from '#server/mail/outbox.ts';
+import { Enrolment, Lesson, PhotoNote, ProgressPhoto, Series, User } from '#server/models/index.ts';
+import { maySitAtBench } from '#server/policies/workroom.ts';
+
+/**
+ * Says *weave on* or *mend first* of a waiting photo, with words and pinned notes, and writes to the student. Of two who
+ * answer at once the first is heard; the other is told who was.
+ * @throws NOT_FOUND for another workroom's photo; CONFLICT when it was answered in the meantime.
+ */
+export async function giveVerdict(ctx: Context, input: VerdictInput): Promise<ProgressPhoto> {
+  authorize(ctx.actor !== null, 'UNAUTHENTICATED');
+  const { actor } = ctx;
+  const known = found(await ProgressPhoto.findOne({ where: { publicId: input.photo } }));
+  const enrolment = found(await Enrolment.findByPk(known.enrolmentId));
+  const series = found(await Series.findByPk(enrolment.seriesId));
+  authorize(maySitAtBench(actor, series.workroomId));
+  return withTransaction(async () => {
+    const photo = found(await ProgressPhoto.findByPk(known.id, { lock: true }));
+    if (photo.verdict !== 'waits') throw await answeredAlready(photo);
+    await photo.update({ verdict: input.verdict, verdictWords: input.words, verdictAt: ctx.clock.now(), verdictById: actor.userId });
+    await PhotoNote.bulkCreate(input.notes.map((note, index) => ({ photoId: photo.id, position: index + 1, authorId: actor.userId, ...note })));
+    await audit(ctx, `verdict-${input.verdict}`, { kind: 'photo', id: photo.publicId });
+    await tellStudent({ photo, enrolment, series, teacherName: actor.name, input });
+    return photo;
+  });
+}
+
+async function answeredAlready(photo: ProgressPhoto): Promise<AppError> {
+  const by = photo.verdictById === null ? null : await User.findByPk(photo.verdictById);
+  return new AppError('CONFLICT', { says: `${by?.name ?? 'Somebody'} answered this photo in the meantime: ${photo.verdict === 'weave-on' ? 'weave on' : 'mend first'}. Yours was not sent.` });
+}
+
+async function tellStudent(told: { photo: ProgressPhoto; enrolment: Enrolment; series: Series; teacherName: string; input: VerdictInput }): Promise<void> {
+  const { photo, enrolment, series, teacherName, input } = told;
+  const student = found(await User.findByPk(enrolment.userId));
+  const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] });
+  const partNumber = lessons.findIndex(({ id }) => id === photo.lessonId) + 1;
+  const opened = lessons.findIndex(({ opens }) => opens.rule === 'after-verdict' && opens.lesson === lessons[partNumber - 1]?.publicId) + 1;
+  await postLetter({
+    template: 'verdict',
+    dedupeKey: `verdict:${photo.publicId}`,
+    to: { userId: student.id, name: student.name, address: student.email },
+    data: {
+      seriesTitle: series.title,
+      seriesSlug: series.slug,
+      partNumber,
+      teacherName,
+      verdict: input.verdict,
+      words: input.words,
+      notes: input.notes.map(({ words }) => words),
+      openedPart: input.verdict === 'weave-on' && opened > 0 ? opened : null,
+    },
+  });
+}
