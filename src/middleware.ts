@@ -4,7 +4,7 @@
  */
 import { randomUUID } from 'node:crypto';
 import type { APIContext, MiddlewareNext } from 'astro';
-import { getActionContext } from 'astro:actions';
+import { getActionContext, type ActionError } from 'astro:actions';
 import { defineMiddleware } from 'astro:middleware';
 import { actorOfToken, sessionCookie } from '#server/auth/sessions.ts';
 import { config } from '#server/config.ts';
@@ -18,8 +18,7 @@ import { comesFromOwnPages, ownOrigins } from '#server/web/origin.ts';
 import { cacheRule, completePolicy } from '#server/web/page-headers.ts';
 import { knownError, problem } from '#server/web/respond.ts';
 import { ROUTE_RULES } from '#server/web/route-rules.ts';
-
-const SAID = 'said';
+import { saidCookie } from '#server/web/said.ts';
 
 export const onRequest = defineMiddleware(async (context, next) => {
   if (context.isPrerendered) return next();
@@ -48,8 +47,9 @@ export const onRequest = defineMiddleware(async (context, next) => {
 
 /** A sentence left by the page before, shown once. */
 function takeSaid(context: APIContext): string | null {
-  const said = context.cookies.get(SAID)?.value ?? null;
-  if (said !== null && context.request.method === 'GET') context.cookies.delete(SAID, { path: '/' });
+  const { name } = saidCookie();
+  const said = context.cookies.get(name)?.value ?? null;
+  if (said !== null && context.request.method === 'GET') context.cookies.delete(name, { path: '/' });
   return said;
 }
 
@@ -62,15 +62,32 @@ async function answerFormAction(context: APIContext, next: MiddlewareNext): Prom
   if (action?.calledFrom !== 'form') return null;
   const result = await action.handler();
   const answer = result.data as FormAnswer | undefined;
-  if (answer === undefined) throw new AppError('BUG', { cause: result.error });
+  if (answer === undefined) throw appErrorOfAction(result.error);
   if (answer.ok === 'refused') throw new AppError(answer.code, { says: answer.says });
   if (answer.ok) {
-    if (answer.said !== undefined) context.cookies.set(SAID, answer.said, { path: '/', httpOnly: true, sameSite: 'lax', secure: config().secureCookies, maxAge: 60 });
+    const said = saidCookie();
+    if (answer.said !== undefined) context.cookies.set(said.name, answer.said, said.options);
     return context.redirect(answer.to, 303);
   }
   setActionResult(action.name, serializeActionResult(result));
   const page = await next();
-  return page.status === 200 ? new Response(page.body, { status: 422, headers: page.headers }) : page;
+  if (page.status !== 200) return page;
+  if (answer.retryAfterSeconds !== undefined) page.headers.set('retry-after', String(answer.retryAfterSeconds));
+  return new Response(page.body, { status: answer.status, headers: page.headers });
+}
+
+/** What Astro refuses before our own code sees a form: a name that no action has, a body that is no form or too long. */
+function appErrorOfAction(error: ActionError | undefined): AppError {
+  switch (error?.code) {
+    case 'NOT_FOUND':
+      return new AppError('NOT_FOUND');
+    case 'UNSUPPORTED_MEDIA_TYPE':
+      return new AppError('UNSUPPORTED');
+    case 'CONTENT_TOO_LARGE':
+      return new AppError('TOO_LARGE');
+    default:
+      return new AppError('BUG', { cause: error });
+  }
 }
 
 function withHeaders(response: Response, signedIn: boolean): Response {
@@ -84,9 +101,10 @@ function withHeaders(response: Response, signedIn: boolean): Response {
 
 async function pageForError(context: APIContext, error: unknown, requestId: string): Promise<Response> {
   const known = knownError(error);
-  if (known.code === 'UNAUTHENTICATED') {
-    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : '/';
-    return context.redirect(`/sign-in?to=${encodeURIComponent(back)}`, 303);
+  if (known.code === 'UNAUTHENTICATED' || known.code === 'PROOF_NEEDED') {
+    // A form's own page is where its action stands; the name of the action itself is not come back to.
+    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : context.url.pathname;
+    return context.redirect(`${known.code === 'UNAUTHENTICATED' ? '/sign-in' : '/prove'}?to=${encodeURIComponent(back)}`, 303);
   }
   // An empty 404 makes Astro show its 404 page.
   if (known.code === 'NOT_FOUND' || known.code === 'GONE') return new Response(null, { status: 404 });

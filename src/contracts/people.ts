@@ -1,11 +1,96 @@
 /** Forms of having an account. The sentences are what a person reads at the field. */
 import { z } from 'astro/zod';
+import { parseMailAddress } from '#core/mail-address.ts';
 
-const email = z.string({ required_error: 'The address is missing. Write it like name@saltmarsh.example.' }).trim().min(1, 'The address is missing. Write it like name@saltmarsh.example.').max(254, 'At most 254 characters work here.');
+/** A text field that must be filled. A field that comes twice, or not at all, is missing. */
+const filled = (missing: string, longest: number) =>
+  z.string({ required_error: missing, invalid_type_error: missing }).trim().min(1, missing).max(longest, `At most ${longest} characters work here.`);
 
-export const SignInForm = z.object({
-  email,
-  password: z.string({ required_error: 'The password is missing.' }).min(1, 'The password is missing.').max(1_024),
-  to: z.string().optional(),
+const MISSING_ADDRESS = 'The mail address is missing. Write it like name@saltmarsh.example.';
+
+const mailAddress = filled(MISSING_ADDRESS, 320).transform((typed, check) => {
+  const outcome = parseMailAddress(typed);
+  if (outcome.ok) return outcome.value;
+  check.addIssue({ code: z.ZodIssueCode.custom, message: outcome.problems[0]?.message ?? MISSING_ADDRESS });
+  return z.NEVER;
 });
+
+/** Not trimmed: blanks belong to a password. What is too long to be one is refused before it is hashed. */
+const password = (missing = 'The password is missing.') =>
+  z.string({ required_error: missing, invalid_type_error: missing }).min(1, missing).max(1_024, 'At most 256 characters work.');
+
+const name = filled('Your name is missing. It stands beside your photos and questions.', 80)
+  .refine((text) => !/\p{C}/u.test(text), 'There is a sign in it that cannot be shown. Type it again.');
+
+const token = z.string().max(100).catch('');
+const publicId = z.string().max(26).catch('');
+
+/** Where to go afterwards; judged again where it is used. */
+const to = z.string().max(2_000).optional().catch(undefined);
+
+/** A tick box: absent when it is not ticked. */
+const ticked = z.string().optional().catch(undefined).transform((value) => value !== undefined);
+
+export const SignInForm = z.object({ email: mailAddress, password: password(), stay: ticked, to });
 export type SignInInput = z.output<typeof SignInForm>;
+
+export const SignUpForm = z.object({ name, email: mailAddress, password: password(), to });
+export type SignUpInput = z.output<typeof SignUpForm>;
+
+export const ForgottenForm = z.object({ email: mailAddress });
+export type ForgottenInput = z.output<typeof ForgottenForm>;
+
+export const ConfirmForm = z.object({ token });
+
+export const NewPasswordForm = z.object({ token, password: password() });
+export type NewPasswordInput = z.output<typeof NewPasswordForm>;
+
+export const ChangePasswordForm = z.object({ oldPassword: password('Your old password is missing.'), password: password('The new password is missing.') });
+export type ChangePasswordInput = z.output<typeof ChangePasswordForm>;
+
+export const ProveForm = z.object({ password: password(), to });
+export type ProveInput = z.output<typeof ProveForm>;
+
+const UNITS = ['cm', 'in'] as const;
+const SCHEMES = ['system', 'light', 'dark'] as const;
+const WHICH = 'Choose one of these.';
+
+export const AccountForm = z.object({
+  name,
+  units: z.enum(UNITS, { errorMap: () => ({ message: WHICH }) }),
+  scheme: z.enum(SCHEMES, { errorMap: () => ({ message: WHICH }) }),
+  timeZone: z.string({ required_error: 'The time zone is missing.', invalid_type_error: 'The time zone is missing.' }).max(64, 'There is no such time zone.').refine(isTimeZone, 'There is no such time zone. Choose one of the list.'),
+});
+export type AccountInput = z.output<typeof AccountForm>;
+
+export const EndSessionForm = z.object({ session: z.string().max(64).catch('') });
+export const NothingForm = z.object({});
+
+/** Whether `name` is a zone of the IANA database that this runtime knows. */
+export function isTimeZone(zone: string): boolean {
+  try {
+    return /^[A-Za-z]/.test(zone) && new Intl.DateTimeFormat('en', { timeZone: zone }) instanceof Intl.DateTimeFormat;
+  } catch {
+    return false;
+  }
+}
+
+export const LetInForm = z.object({
+  person: publicId,
+  workroom: filled('The name of the workroom is missing.', 120),
+  handle: filled('The handle is missing. It is the end of the address of her page.', 40)
+    .refine((text) => /^[a-z0-9]+(?:-[a-z0-9]+)*$/.test(text), 'Small letters, figures and single hyphens work, such as saltmarsh-loom-room.'),
+});
+export type LetInInput = z.output<typeof LetInForm>;
+
+export const SuspendForm = z.object({
+  person: publicId,
+  reason: filled('The reason is missing. It is kept in the log of the office.', 200),
+});
+export type SuspendInput = z.output<typeof SuspendForm>;
+
+export const RestoreForm = z.object({ person: publicId });
+
+const rowId = z.coerce.number().int().positive().max(4_294_967_295).catch(0);
+export const SendAgainForm = z.object({ mail: rowId });
+export const TryAgainForm = z.object({ job: rowId });

@@ -2,9 +2,12 @@
  * What can go wrong, in about a dozen words. Every layer throws AppError; each edge (endpoint, action, page)
  * has one mapping of these words to what its caller sees.
  */
+import type { Actor } from '#server/context.ts';
+
 export const ERROR_CODES = {
   VALIDATION: { status: 422, says: 'Something in this form does not work yet.' },
   UNAUTHENTICATED: { status: 401, says: 'Sign in to go on.' },
+  PROOF_NEEDED: { status: 403, says: 'Type your password once more to go on.' },
   FORBIDDEN: { status: 403, says: 'This belongs to somebody else.' },
   NOT_FOUND: { status: 404, says: 'There is nothing at this address.' },
   CONFLICT: { status: 409, says: 'This changed in the meantime.' },
@@ -54,6 +57,12 @@ export class AppError extends Error {
 /** A refusal at one field of a form. */
 export function fieldError(field: string, says: string): AppError {
   return new AppError('VALIDATION', { fields: { [field]: says } });
+}
+
+/** The person who asks, or UNAUTHENTICATED. */
+export function signedIn(ctx: { readonly actor: Actor | null }): Actor {
+  if (ctx.actor === null) throw new AppError('UNAUTHENTICATED');
+  return ctx.actor;
 }
 
 /** Throws unless `allowed`: NOT_FOUND where the thing must stay unseen, FORBIDDEN where it may be seen but not touched. */

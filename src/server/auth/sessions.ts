@@ -1,8 +1,10 @@
 /** Who is asking, and the beginning and end of being signed in. */
 import { createHash, randomBytes } from 'node:crypto';
+import { KNOWN_DEVICE_DAYS } from '#server/auth/known-device.ts';
 import { lucia } from '#server/auth/lucia.ts';
 import { config } from '#server/config.ts';
 import type { Actor } from '#server/context.ts';
+import { Workroom, WorkroomHelper } from '#server/models/index.ts';
 
 const TOKEN = /^[A-Za-z0-9_-]{43}$/;
 const HOUR = 3_600;
@@ -29,9 +31,22 @@ export function sessionCookie(): { name: string; options: { path: '/'; httpOnly:
   return { name: secure ? '__Host-s' : 's', options: { path: '/', httpOnly: true, secure, sameSite: 'lax' } };
 }
 
+/** The cookie that holds the mark of a known browser. */
+export function knownDeviceCookie(): { name: string; options: { path: '/'; httpOnly: true; secure: boolean; sameSite: 'lax'; maxAge: number } } {
+  const { name, options } = sessionCookie();
+  return { name: name.replace(/s$/, 'known'), options: { ...options, maxAge: KNOWN_DEVICE_DAYS * DAY } };
+}
+
 export interface Begun {
   readonly token: string;
   readonly endsAt: Date;
+}
+
+/** Which lifetime a person's sessions have: teachers, helpers and stewards open other people's things. */
+export async function lifetimeOf({ id, isSteward }: { readonly id: number; readonly isSteward: boolean }): Promise<keyof typeof LIFETIMES> {
+  if (isSteward) return 'trusted';
+  const roles = (await Workroom.count({ where: { ownerId: id } })) + (await WorkroomHelper.count({ where: { userId: id } }));
+  return roles > 0 ? 'trusted' : 'student';
 }
 
 /** Starts a session for a person whose password was just proved. */

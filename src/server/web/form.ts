@@ -10,8 +10,8 @@ export type TypedValues = Readonly<Record<string, string | readonly string[]>>;
 export type FormAnswer =
   /** Done: go to `to`, where `said` is shown once. */
   | { readonly ok: true; readonly to: string; readonly said?: string }
-  /** Not yet: `fields` by name, `summary` for what belongs to no field, `values` as they were typed. */
-  | { readonly ok: false; readonly summary: string; readonly fields: Readonly<Record<string, string>>; readonly values: TypedValues }
+  /** Not yet: `fields` by name, `summary` for what belongs to no field, `values` as they were typed, `status` of the page drawn again. */
+  | { readonly ok: false; readonly status: number; readonly retryAfterSeconds?: number; readonly summary: string; readonly fields: Readonly<Record<string, string>>; readonly values: TypedValues }
   /** No change of the form would cure it. */
   | { readonly ok: 'refused'; readonly code: ErrorCode; readonly says: string };
 
@@ -48,14 +48,15 @@ export async function answerForm<S extends z.ZodTypeAny>(schema: S, form: FormDa
   const typed = typedValues(form);
   const values = Object.fromEntries(Object.entries(typed).filter(([name]) => !SECRET.test(name)));
   const parsed = schema.safeParse(typed);
-  if (!parsed.success) return { ok: false, summary: '', fields: fieldSentences(parsed.error), values };
+  if (!parsed.success) return { ok: false, status: 422, summary: '', fields: fieldSentences(parsed.error), values };
   try {
     return { ok: true, ...(await work(parsed.data)) };
   } catch (error) {
     if (!(error instanceof AppError) || error.code === 'BUG') throw error;
     if (!FORM_CODES.has(error.code)) return { ok: 'refused', code: error.code, says: error.says };
     const hasFields = Object.keys(error.fields).length > 0;
-    return { ok: false, summary: hasFields ? '' : error.says, fields: error.fields, values };
+    const { status, fields, retryAfterSeconds } = error;
+    return { ok: false, status, ...(retryAfterSeconds === undefined ? {} : { retryAfterSeconds }), summary: hasFields ? '' : error.says, fields, values };
   }
 }
 

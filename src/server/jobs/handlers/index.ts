@@ -3,6 +3,7 @@ import type { z } from 'astro/zod';
 import type { Context } from '#server/context.ts';
 import type { JobDefinition } from '#server/jobs/definition.ts';
 import { settleCheckout, settlePaymentEvent } from '#server/jobs/definitions/payments.ts';
+import { sendPasswordLink } from '#server/jobs/definitions/people.ts';
 
 export interface RegisteredJob {
   readonly definition: JobDefinition<unknown>;
@@ -27,4 +28,5 @@ export const REGISTERED: readonly RegisteredJob[] = [
     const { settleCheckout: settle } = await import('#server/use-cases/checkout/settle-checkout.ts');
     return async (ctx, { checkoutId }) => { await settle(ctx, checkoutId); };
   }),
+  bind(sendPasswordLink, async () => (await import('#server/use-cases/people/write-password-link.ts')).writePasswordLink),
 ];
