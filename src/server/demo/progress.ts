@@ -29,9 +29,8 @@ export async function bringMaudToPartTwo(maud: User, series: Series, seat: Enrol
   if (first === undefined || second === undefined) throw new RangeError('the series has fewer than two parts');
   for (const lesson of [first, second]) {
     const items = await GatheringItem.findAll({ where: { lessonId: lesson.id } });
-    for (const item of lesson === first ? items : items.slice(0, -1)) {
-      await setTick(ctx, { subject: 'gather', series: series.slug, item: item.publicId, ticked: true });
-    }
+    const had = lesson === first ? items : items.slice(0, -1);
+    await setTick(ctx, { subject: 'gather', series: series.slug, items: had.map(({ publicId }) => publicId), ticked: true });
     for (const step of lesson.draftReading.ok ? lesson.draftReading.steps : []) {
       await setTick(ctx, { subject: 'step', series: series.slug, lesson: lesson.publicId, item: step.id, ticked: true });
     }
