@@ -5,6 +5,7 @@ import { closeSync, existsSync, openSync, renameSync } from 'node:fs';
 import { lastLines } from './say.mjs';
 
 const STOP_SECONDS = 40;
+const KEPT_OUTPUT = 20_000;
 const SETPRIV = '/usr/bin/setpriv';
 
 /**
@@ -16,6 +17,25 @@ const SETPRIV = '/usr/bin/setpriv';
 export function withParent(command) {
   const [program = '', ...args] = command;
   return existsSync(SETPRIV) ? [SETPRIV, '--pdeathsig', 'TERM', program, ...args] : [program, ...args];
+}
+
+/**
+ * Runs a command to its end.
+ * @param {readonly string[]} command
+ * @param {{ cwd?: string, env?: NodeJS.ProcessEnv }} [options]
+ * @returns {Promise<{ ok: boolean, output: string }>} whether it ended well, and the last of what it said
+ */
+export function runToEnd(command, { cwd, env } = {}) {
+  return new Promise((resolve) => {
+    const [program, ...args] = withParent(command);
+    const child = spawn(program, args, { stdio: ['ignore', 'pipe', 'pipe'], env: env ?? process.env, ...cwd === undefined ? {} : { cwd } });
+    let output = '';
+    const keep = (/** @type {Buffer} */ words) => { output = (output + words.toString()).slice(-KEPT_OUTPUT); };
+    child.stdout.on('data', keep);
+    child.stderr.on('data', keep);
+    child.once('error', (error) => { resolve({ ok: false, output: error.message }); });
+    child.once('close', (code) => { resolve({ ok: code === 0, output }); });
+  });
 }
 
 /**

@@ -2,6 +2,8 @@
 /** What the scripts tell the person at the terminal: a line a step, with seconds. */
 import { existsSync, readFileSync } from 'node:fs';
 
+const LONGEST_LINE = 300;
+
 /** Something the person can put right; its message is all she needs to see. */
 export class Refusal extends Error {}
 
@@ -38,6 +40,10 @@ export function seconds(start) {
 
 /** The end of a log. @param {string} file @param {number} [count] */
 export function lastLines(file, count = 20) {
-  if (!existsSync(file)) return '';
-  return readFileSync(file, 'utf8').trimEnd().split('\n').slice(-count).map((line) => `    ${line}`).join('\n');
+  return existsSync(file) ? tail(readFileSync(file, 'utf8'), count) : '';
+}
+
+/** The last lines of a text, set in. @param {string} text @param {number} [count] */
+export function tail(text, count = 20) {
+  return text.trimEnd().split('\n').slice(-count).map((line) => `    ${line.slice(0, LONGEST_LINE)}`).join('\n');
 }

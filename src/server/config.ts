@@ -12,6 +12,7 @@ const url = z.string().url();
 const Settings = z.object({
   FELLMARK_MODE: z.enum(['production', 'development', 'test']).default('production'),
   FELLMARK_PORT: port.default(4321),
+  FELLMARK_HOST: z.string().ip().default('127.0.0.1'),
   FELLMARK_DATA: z.string().min(1).default('.data'),
   FELLMARK_UPLOADS: z.string().min(1).default('uploads'),
   FELLMARK_DEMO: flag.default('off'),
@@ -27,11 +28,14 @@ const Settings = z.object({
   FELLMARK_PAYMENTS_WEBHOOK_SECRETS: z.string().default(''),
   FELLMARK_SECRET: z.string().min(32),
   FELLMARK_TRUSTED_PROXIES: z.string().default(''),
+  FELLMARK_DRAIN_SECONDS: z.coerce.number().int().min(0).max(60).default(5),
 });
 
 export interface Config {
   readonly mode: 'production' | 'development' | 'test';
   readonly port: number;
+  /** The address of this machine to listen on. */
+  readonly host: string;
   readonly dataFolder: string;
   readonly uploadsFolder: string;
   readonly demo: boolean;
@@ -46,7 +50,10 @@ export interface Config {
   readonly payments: { url: string | undefined; key: string; webhookSecrets: readonly string[] };
   /** Key of signatures and of the pepper: never stored in the database. */
   readonly secret: string;
+  /** Addresses and networks of our own proxies. */
   readonly trustedProxies: readonly string[];
+  /** How long a stopping web process goes on serving after it says that it is no longer ready. */
+  readonly drainSeconds: number;
 }
 
 /** Thrown at start when a setting is missing or nonsense; the message names each of them. */
@@ -85,6 +92,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
   return Object.freeze({
     mode: s.FELLMARK_MODE,
     port: s.FELLMARK_PORT,
+    host: s.FELLMARK_HOST,
     dataFolder: s.FELLMARK_DATA,
     uploadsFolder: s.FELLMARK_UPLOADS,
     demo: s.FELLMARK_DEMO,
@@ -109,6 +117,7 @@ export function readConfig(env: Readonly<Record<string, string | undefined>>): C
     },
     secret: s.FELLMARK_SECRET,
     trustedProxies: listOf(s.FELLMARK_TRUSTED_PROXIES),
+    drainSeconds: s.FELLMARK_DRAIN_SECONDS,
   });
 }
 

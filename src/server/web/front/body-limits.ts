@@ -23,7 +23,7 @@ export const BODY_LIMITS: readonly BodyLimit[] = [
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?videos?(?:\/|$)/, maxBytes: 20 * MIB, withinSeconds: 600 },
   { path: /^\/(?:sign-in|sign-up|sign-out|forgotten|reset|confirm)(?:\/|$)/, maxBytes: 4 * KIB, withinSeconds: 30 },
   { path: /^\/api\/reckon$/, maxBytes: 64 * KIB, withinSeconds: 30 },
-  { path: /^\/api\/payments\/webhook$/, maxBytes: 256 * KIB, withinSeconds: 30 },
+  { path: /^\/api\/payments\/events$/, maxBytes: 256 * KIB, withinSeconds: 30 },
   { path: /^\//, maxBytes: MIB, withinSeconds: 30 },
 ];
 

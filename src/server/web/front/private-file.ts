@@ -10,9 +10,7 @@ import send from 'send';
 import type { Handler } from '#server/web/front/handler.ts';
 import { refuse } from '#server/web/front/refuse.ts';
 import { gateOf } from '#server/web/front/response-gate.ts';
-
-/** An endpoint puts a file's key here; it never leaves the house. */
-export const SEND_HEADER = 'X-Fellmark-Send';
+import { SEND_HEADER } from '#server/web/send-file.ts';
 
 const KEY = /^[A-Za-z0-9_-][A-Za-z0-9._-]*(?:\/[A-Za-z0-9_-][A-Za-z0-9._-]*)*$/;
 const FILE_POLICY = "sandbox; default-src 'none'";

@@ -12,8 +12,10 @@ export const SECURITY_HEADERS: Readonly<Record<string, string>> = {
   'Cross-Origin-Resource-Policy': 'same-origin',
 };
 
-/** What a page that brings no policy of its own may do: everything from here, nothing from elsewhere, in nobody's frame. */
-const FALLBACK_POLICY = "default-src 'self'; base-uri 'none'; object-src 'none'; frame-ancestors 'none'";
+/** A page made at build time carries its policy inside; two things only a header can say. */
+const PAGE_POLICY = "base-uri 'none'; object-src 'none'; frame-ancestors 'none'";
+/** Anything else, opened by itself, may draw itself and do nothing. */
+const FILE_POLICY = "default-src 'none'; style-src 'unsafe-inline'; frame-ancestors 'none'";
 
 /** @param fallbackPolicy whether answers without a policy get one; the development server's own inline parts need none */
 export function securityHeaders(fallbackPolicy: boolean): Handler {
@@ -21,11 +23,10 @@ export function securityHeaders(fallbackPolicy: boolean): Handler {
     for (const [name, value] of Object.entries(SECURITY_HEADERS)) response.setHeader(name, value);
     gateOf(response).beforeHead((head) => {
       head.removeHeader('X-Powered-By');
-      const type = head.getHeader('content-type');
-      if (typeof type === 'string' && /^text\/html\b/i.test(type) && !/charset=/i.test(type)) {
-        head.setHeader('Content-Type', 'text/html; charset=utf-8');
-      }
-      if (fallbackPolicy && !head.hasHeader('content-security-policy')) head.setHeader('Content-Security-Policy', FALLBACK_POLICY);
+      const type = String(head.getHeader('content-type') ?? '');
+      const isPage = /^text\/html\b/i.test(type);
+      if (isPage && !/charset=/i.test(type)) head.setHeader('Content-Type', 'text/html; charset=utf-8');
+      if (fallbackPolicy && !head.hasHeader('content-security-policy')) head.setHeader('Content-Security-Policy', isPage ? PAGE_POLICY : FILE_POLICY);
       return undefined;
     });
     next();

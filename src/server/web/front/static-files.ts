@@ -20,6 +20,8 @@ interface StaticFile {
 
 const SUFFIX: Readonly<Record<Coding, string>> = { br: '.br', gzip: '.gz' };
 const HASHED_FOLDER = '/_astro/';
+/** Shown by the site with their own status, never asked for by name. */
+const ERROR_PAGES = new Set(['/404.html', '/500.html']);
 const FOREVER = 'public, max-age=31536000, immutable';
 const BRIEFLY = 'public, max-age=3600';
 
@@ -61,7 +63,7 @@ function listFiles(root: string): ReadonlyMap<string, StaticFile> {
   const present = new Set(names);
   const files = new Map<string, StaticFile>();
   for (const name of names) {
-    if (isCompressedTwin(name, present)) continue;
+    if (isCompressedTwin(name, present) || ERROR_PAGES.has(name)) continue;
     const codings = (['br', 'gzip'] as const).filter((coding) => present.has(name + SUFFIX[coding]));
     const file = { name, codings };
     files.set(encodeURI(name), file);
