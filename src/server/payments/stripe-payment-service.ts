@@ -205,8 +205,9 @@ function failureOf(error: InstanceType<typeof Stripe.errors.StripeError>): Payme
   if (error instanceof StripeCardError) return { kind: 'not-possible', code, message };
   if (error instanceof StripeInvalidRequestError) {
     if (error.statusCode === 404 || code === 'resource_missing') return { kind: 'not-found', message };
-    // A complaint about a parameter is ours to mend; without one it is the state of the thing that stands in the way.
-    return error.param === undefined || code === 'charge_already_refunded' ? { kind: 'not-possible', code, message } : { kind: 'misconfigured', code, message };
+    // A complaint about a parameter is ours to mend; without one, or about an amount, it is the state of the thing that stands in the way.
+    const ours = error.param !== undefined && error.param !== 'amount' && code !== 'charge_already_refunded';
+    return { kind: ours ? 'misconfigured' : 'not-possible', code, message };
   }
   return { kind: 'unreachable', message };
 }
