@@ -4,12 +4,13 @@ import node from '@astrojs/node';
 import react from '@astrojs/react';
 import mdx from '@astrojs/mdx';
 import tailwind from '@astrojs/tailwind';
+import { showComponents } from './scripts/show-components.mjs';
 
 export default defineConfig({
   output: 'server',
   // Our own HTTP server stands in front (src/processes/web.ts): it knows limits, ranges and graceful stop.
   adapter: node({ mode: 'middleware' }),
-  integrations: [react(), mdx(), tailwind({ applyBaseStyles: false })],
+  integrations: [react(), mdx(), tailwind({ applyBaseStyles: false }), showComponents()],
   trailingSlash: 'ignore',
   // Our middleware checks origins against the address set at run time; Astro's own check is frozen at build time.
   security: { checkOrigin: false },

@@ -10,7 +10,8 @@ const shared = {
 };
 
 export const TickInput = z.discriminatedUnion('subject', [
-  z.object({ subject: z.literal('gather'), item: publicId, ...shared }),
+  /** A line of a merged list stands for several things, which are ticked together. */
+  z.object({ subject: z.literal('gather'), items: z.union([publicId.transform((id) => [id]), z.array(publicId).min(1).max(60)]), ...shared }),
   z.object({ subject: z.literal('step'), lesson: publicId, item: z.string().regex(/^[a-z0-9-]{1,64}$/), ...shared }),
 ]);
 export type TickInput = z.output<typeof TickInput>;

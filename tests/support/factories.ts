@@ -1,6 +1,8 @@
 /** Rows for tests. Each makes the parents it needs and takes what the test is about. */
 import { randomBytes } from 'node:crypto';
 import type { CreationAttributes } from 'sequelize';
+import { factsOf } from '#core/lesson-text/lesson-facts.ts';
+import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { Enrolment, GatheringItem, Lesson, LessonVersion, Series, User, Workroom } from '#server/models/index.ts';
 
 const some = (): string => randomBytes(5).toString('hex');
@@ -27,8 +29,10 @@ export async function buildLesson(given: Partial<CreationAttributes<Lesson>> = {
   const lesson = await Lesson.create({ seriesId, position, title: `Part ${position}`, opens: { rule: 'at-once' }, ...given });
   if (given.publishedVersionId === undefined) {
     const source = 'Weave **one row**.';
-    const version = await LessonVersion.create({ lessonId: lesson.id, number: 1, source, tree: {} });
-    await lesson.update({ publishedVersionId: version.id, draftSource: source });
+    const reading = parseLessonText(source);
+    if (!reading.ok) throw new RangeError(source);
+    const version = await LessonVersion.create({ lessonId: lesson.id, number: 1, source, tree: reading.tree, facts: factsOf(reading) });
+    await lesson.update({ publishedVersionId: version.id, draftSource: source, draftReading: reading });
   }
   return lesson;
 }

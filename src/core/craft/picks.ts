@@ -1,6 +1,6 @@
 /** One pick of tabby: how close rows lie, and how much yarn crosses the cloth. */
 import type { Beat, WeaveMode } from '#core/craft/piece.ts';
-import { waveOf, weftWaveRange, type Wave } from '#core/craft/crimp.ts';
+import { waveOf, weftWaveRange, type WaveRange } from '#core/craft/crimp.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 
 /** Picks in one compressed weft diameter: hanging 0.7, firm tapestry 1.1, rug 1.45. Round yarns reach at most 2. */
@@ -40,17 +40,19 @@ export interface Crossing {
 }
 
 interface ChosenWave {
-  readonly wave: Wave;
+  readonly heightMm: number;
+  /** The wave that was wished for did not fit; this is the nearest that does. */
   readonly clamped: boolean;
 }
 
-function chooseWeftWave(crossing: Crossing, D: number): ChosenWave | undefined {
-  const range = weftWaveRange(D, crossing.spacingMm, crossing.pickSpacingMm);
-  if (range === undefined) return undefined;
-  const wished = crossing.mode === 'straight-warp' ? D : D / 2;
-  const height = crossing.mode === 'straight-warp' ? D : Math.min(range.max, Math.max(range.min, wished));
-  const wave = waveOf(crossing.spacingMm, D, height);
-  return wave === undefined ? undefined : { wave, clamped: height !== wished };
+/**
+ * Straight warp leaves the whole wave D to the weft, or jams; in balanced cloth both share
+ * it as nearly as they can.
+ */
+export function chooseWeftWave(range: WaveRange, D: number, mode: WeaveMode): ChosenWave | undefined {
+  if (mode === 'straight-warp') return range.max < D * (1 - 1e-9) ? undefined : { heightMm: D, clamped: false };
+  const heightMm = Math.min(range.max, Math.max(range.min, D / 2));
+  return { heightMm, clamped: heightMm !== D / 2 };
 }
 
 /** Turn round a selvedge end: half a circle of diameter D, one row further on. */
@@ -61,14 +63,16 @@ export function turnLength(diameterSumMm: number, pickSpacingMm: number): number
 /** Undefined where the yarns jam. */
 export function pickGeometry(crossing: Crossing): PickGeometry | undefined {
   const D = crossing.warpDiameterMm + crossing.weftDiameterMm;
-  const chosen = chooseWeftWave(crossing, D);
-  if (chosen === undefined) return undefined;
+  const range = weftWaveRange(D, crossing.spacingMm, crossing.pickSpacingMm);
+  const chosen = range && chooseWeftWave(range, D, crossing.mode);
+  const wave = chosen && waveOf(crossing.spacingMm, D, chosen.heightMm);
+  if (chosen === undefined || wave === undefined) return undefined;
   return {
     diameterSumMm: D,
     pickSpacingMm: crossing.pickSpacingMm,
     tightness: D / crossing.spacingMm,
-    crimp: chosen.wave.crimp,
-    stepMm: chosen.wave.lengthMm,
+    crimp: wave.crimp,
+    stepMm: wave.lengthMm,
     turnMm: turnLength(D, crossing.pickSpacingMm),
     clamped: chosen.clamped,
   };

@@ -12,6 +12,14 @@ export type * from '#core/craft/plan-types.ts';
 const CRAFTS = { 'frame-loom': planFrameLoom } as const;
 const CRAFT_NAMES = ['frame-loom'] as const satisfies readonly (keyof typeof CRAFTS)[];
 
+/** Reckons the piece in these fields; undefined, with a problem among their findings, if it cannot be woven. */
+export function planInFields(fields: Fields): Plan | undefined {
+  const { findings } = fields;
+  const craft = findings.soundly(() => fields.choice('craft', 'Craft', CRAFT_NAMES));
+  const reckoned = craft && CRAFTS[craft](fields);
+  return reckoned && { ...reckoned, warnings: findings.warnings };
+}
+
 /**
  * Reckons the plan of a piece. Never throws for what a person may send: whatever is
  * wrong comes back as problems, all of them at once, one for each refused value.
@@ -19,8 +27,5 @@ const CRAFT_NAMES = ['frame-loom'] as const satisfies readonly (keyof typeof CRA
  */
 export function planPiece(piece: unknown, units: Units = 'cm'): Outcome<Plan> {
   const findings = new Findings(units);
-  const fields = Fields.of(piece, '', 'A piece', findings);
-  const craft = findings.soundly(() => fields.choice('craft', 'Craft', CRAFT_NAMES));
-  const reckoned = craft === undefined ? undefined : CRAFTS[craft](fields);
-  return findings.outcome(reckoned && { ...reckoned, warnings: findings.warnings });
+  return findings.outcome(planInFields(Fields.of(piece, '', 'A piece', findings)));
 }

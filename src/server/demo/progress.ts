@@ -4,7 +4,6 @@ import sharp from 'sharp';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
-import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { services } from '#server/services.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
 import { withOwnDrawings } from '#server/media/decoders.ts';
@@ -30,11 +29,9 @@ export async function bringMaudToPartTwo(maud: User, series: Series, seat: Enrol
   if (first === undefined || second === undefined) throw new RangeError('the series has fewer than two parts');
   for (const lesson of [first, second]) {
     const items = await GatheringItem.findAll({ where: { lessonId: lesson.id } });
-    for (const item of lesson === first ? items : items.slice(0, -1)) {
-      await setTick(ctx, { subject: 'gather', series: series.slug, item: item.publicId, ticked: true });
-    }
-    const text = parseLessonText(lesson.draftSource);
-    for (const step of text.ok ? text.steps : []) {
+    const had = lesson === first ? items : items.slice(0, -1);
+    await setTick(ctx, { subject: 'gather', series: series.slug, items: had.map(({ publicId }) => publicId), ticked: true });
+    for (const step of lesson.draftReading.ok ? lesson.draftReading.steps : []) {
       await setTick(ctx, { subject: 'step', series: series.slug, lesson: lesson.publicId, item: step.id, ticked: true });
     }
   }

@@ -1,5 +1,7 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import { count, id, json, longText, maybeRef, ref, moment } from '#server/db/columns.ts';
+import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
+import type { LessonTree } from '#core/lesson-text/tree.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /** A lesson's text as it was once published. Rows are added, never changed. */
@@ -8,9 +10,9 @@ export class LessonVersion extends Model<InferAttributes<LessonVersion>, InferCr
   declare lessonId: number;
   declare number: number;
   declare source: string;
-  declare tree: unknown;
-  /** Names of the videos and pictures the text shows: whoever may read it may see them. */
-  declare mediaNames: CreationOptional<string[]>;
+  declare tree: LessonTree;
+  /** What the text speaks of: its steps, amounts, figures and media. Whoever may read it may see its media. */
+  declare facts: LessonFacts;
   declare authorId: CreationOptional<number | null>;
   declare createdAt: CreationOptional<Date>;
 }
@@ -21,7 +23,7 @@ LessonVersion.init({
   number: count(),
   source: longText(),
   tree: json(),
-  mediaNames: { ...json(), defaultValue: [] },
+  facts: json(),
   authorId: maybeRef(),
   createdAt: moment(),
 }, { sequelize, tableName: 'lesson_versions', updatedAt: false });

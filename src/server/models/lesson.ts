@@ -1,5 +1,6 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import { count, id, json, longText, maybeJson, maybeMoment, maybeRef, publicId, ref, text, yes, moment } from '#server/db/columns.ts';
+import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
@@ -17,6 +18,8 @@ export class Lesson extends Model<InferAttributes<Lesson>, InferCreationAttribut
   declare opensAt: CreationOptional<Date | null>;
   declare checkpoint: CreationOptional<Checkpoint | null>;
   declare draftSource: CreationOptional<string>;
+  /** How the draft was read when it was saved: the tree, or the reasons why there is none. */
+  declare draftReading: CreationOptional<LessonText | RefusedText>;
   declare draftRevision: CreationOptional<number>;
   declare publishedVersionId: CreationOptional<number | null>;
   declare takenOutAt: CreationOptional<Date | null>;
@@ -36,6 +39,7 @@ Lesson.init({
   opensAt: maybeMoment(),
   checkpoint: maybeJson(),
   draftSource: longText(),
+  draftReading: { ...json(), defaultValue: { ok: false, problems: [] } },
   draftRevision: count(),
   publishedVersionId: maybeRef(),
   takenOutAt: maybeMoment(),

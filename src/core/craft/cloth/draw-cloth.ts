@@ -49,9 +49,15 @@ function pileRoom(view: ClothView): (bandHeight: number) => number {
   return (bandHeight) => (kept ? bandHeight * 0.72 : Number.POSITIVE_INFINITY);
 }
 
+/** However tall a piece, a picture of it holds no more rows than this. */
+const MOST_ROWS = 280;
+/** Views whose rows have at least this many pixels show the plies of their yarn. */
+const PLIED_FROM = 9;
+
 function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
   const { minEnd, minPick } = detailOf(view);
   const pxPerMm = view.pxPerMm ?? width / piece.widthMm;
+  const height = view.height ?? wovenHeightMm(piece) * pxPerMm;
   /* A picture that shows only part of the width shows that part of the ends. */
   const real = Math.max(4, Math.round(piece.ends * Math.min(1, width / pxPerMm / piece.widthMm)));
   const fitting = Math.max(4, Math.min(real, Math.floor(width / minEnd)));
@@ -64,10 +70,10 @@ function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
     ends,
     grouped: Math.max(1, real / ends),
     pxPerMm,
-    minPick,
+    minPick: Math.max(minPick, height / MOST_ROWS),
     begin: beginOf(piece, view),
     endsTogether: piece.endsTogether,
-    plied: minPick >= 9,
+    plied: minPick >= PLIED_FROM,
     warpColour: piece.warpColour,
     warpWidth: Math.min(end * 0.4, 9),
     paths: new PathStore(view.id),

@@ -26,6 +26,8 @@ export interface Picks {
 /** Rows finer than this show no light and shadow, and are too fine to bow. */
 const LIT_FROM = 3.4;
 const BOWED_FROM = 5;
+/** Where so many rows lie together, nobody sees that they bow. */
+const BOWED_ROWS = 120;
 /** Near, rows from here on show the plies of their yarn and a shade along their lower side. */
 const PLIED_FROM = 9;
 
@@ -58,9 +60,10 @@ interface Lot {
 function sortRows(rows: readonly PickRow[], pitch: number, weave: Weave): { whole: string; lots: Lot[] } {
   const found = ['', '', '', '', '', ''];
   let whole = '';
+  const bowed = pitch >= BOWED_FROM && rows.length <= BOWED_ROWS;
   for (const row of rows) {
     const width = row.x1 - row.x0;
-    const bow = pitch >= BOWED_FROM ? (weave.chance() - 0.5) * Math.min(pitch * 0.5, width * 0.02) : 0;
+    const bow = bowed ? (weave.chance() - 0.5) * Math.min(pitch * 0.5, width * 0.02) : 0;
     const d = `M${num(row.x0)} ${num(row.y)}` + (bow === 0 ? `h${num(width)}` : `q${num(width / 2)} ${num(bow)} ${num(width)} 0`);
     whole += d;
     const lot = (row.odd ? 1 : 0) + 2 * Math.floor(weave.chance() * 3);

@@ -2,17 +2,9 @@
 import { NAIL_DIAMETER_MM, ASHENHURST_K } from '#core/craft/defaults.ts';
 import { END_RANGE, endsFor, endsSuit, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
-import { bottomAllowance, heightAfterShrinking, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
-import {
-  endsOnNails,
-  endsPerMm,
-  nailsOnRail,
-  nailsUsed,
-  railNeeded,
-  usedPitch,
-  workingSpacing,
-  type NailLayout,
-} from '#core/craft/nails.ts';
+import { bottomAllowance, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
+import { largestHeight, largestWidth, layoutOf, widthOfEnds } from '#core/craft/frame-loom/room.ts';
+import { endsPerMm, nailsUsed, railNeeded, workingSpacing } from '#core/craft/nails.ts';
 import type { Dowel, EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
 import type { EndsPlan, LoomPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
@@ -29,13 +21,12 @@ export interface DressedWarp {
   readonly nailDiameterMm: number;
 }
 
+/** Rounding must not refuse what fits exactly. */
+const HAIR_MM = 1e-9;
+
 interface Demands {
   readonly together: EndsTogether;
   readonly parity: Parity;
-}
-
-function layoutOf(loom: Loom): NailLayout {
-  return { pitchMm: usedPitch(loom.nailPitchMm, loom.everyNthNail ?? 1), warping: loom.warping };
 }
 
 /** In words: `an even number of ends`. */
@@ -71,18 +62,15 @@ function reckonedEnds(raw: number, demands: Demands, spacingMm: number, findings
 }
 
 /** Pinned ends may come out at another width than was asked; a whole spacing of difference is worth a word. */
-function checkPinnedWidth(count: number, raw: number, loomToFinished: number, findings: Findings): void {
+function checkPinnedWidth(count: number, raw: number, widthMm: number, findings: Findings): void {
   if (Math.abs(count - raw) <= 2) return;
-  findings.warn('W_WIDTH', '/warp/endCount', `${String(count)} ends come out ${findings.length(count * loomToFinished)} wide, not as wide as was asked.`);
+  findings.warn('W_WIDTH', '/warp/endCount', `${String(count)} ends come out ${findings.length(widthMm)} wide, not as wide as was asked.`);
 }
 
-function checkInsideWidth(loom: Loom, warp: Warp, neededMm: number, widthOf: (ends: number) => number, findings: Findings): void {
-  if (loom.insideWidthMm === undefined || neededMm <= loom.insideWidthMm) return;
-  const layout = layoutOf(loom);
-  const nails = nailsOnRail(loom.insideWidthMm, layout.pitchMm);
-  let most = endsOnNails(nails, layout.warping);
-  while (most >= END_RANGE.min && !endsSuit(most, warp.endsTogether ?? 1, warp.parity ?? 'any')) most -= 1;
-  const largest = most < END_RANGE.min ? 'No width fits at this spacing.' : `At this spacing up to ${findings.length(widthOf(most), 'down')} fit.`;
+function checkInsideWidth(loom: Loom, warp: Warp, neededMm: number, settings: Settings, findings: Findings): void {
+  if (loom.insideWidthMm === undefined || neededMm <= loom.insideWidthMm + HAIR_MM) return;
+  const mostMm = largestWidth(loom, warp, settings) ?? 0;
+  const largest = mostMm === 0 ? 'No width fits at this spacing.' : `At this spacing up to ${findings.length(mostMm, 'down')} fit.`;
   const inside = `The loom is ${findings.length(loom.insideWidthMm)} inside.`;
   findings.reject('E_FIT', '/loom/insideWidthMm', `${inside} The piece needs ${findings.length(neededMm, 'up')}. ${largest}`);
 }
@@ -95,13 +83,12 @@ export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings:
   const spacingMm = workingSpacing(layout, demands.together);
   const loomWidthMm = widthBeforeDrawIn(size.widthMm, settings.drawIn);
   const raw = rawEnds(loomWidthMm, perMm);
-  const finishedWidth = (ends: number): number => (ends / perMm) * (1 - settings.drawIn);
   const count = warp.endCount === undefined ? reckonedEnds(raw, demands, spacingMm, findings) : pinnedEnds(warp.endCount, demands, findings);
   if (count === undefined) return undefined;
-  if (warp.endCount !== undefined) checkPinnedWidth(count, raw, finishedWidth(1), findings);
+  if (warp.endCount !== undefined) checkPinnedWidth(count, raw, widthOfEnds(count, loom, settings), findings);
   const nails = nailsUsed(count, layout.warping);
   const insideWidthNeededMm = railNeeded(nails.top, layout.pitchMm);
-  checkInsideWidth(loom, warp, insideWidthNeededMm, finishedWidth, findings);
+  checkInsideWidth(loom, warp, insideWidthNeededMm, settings, findings);
   const thread = threadOf(warp.yarn, ASHENHURST_K.warp);
   return {
     ends: {
@@ -127,9 +114,9 @@ export function fitHeight(size: Piece['size'], loom: Loom, settings: Settings, d
   const topMm = topAllowance(settings.topMm, dowel?.diameterMm);
   const bottomMm = bottomAllowance(settings.bottomMm);
   const heightNeededMm = heightOnLoomMm + topMm + bottomMm;
-  if (loom.insideHeightMm < heightNeededMm - 1e-9) {
-    const largestMm = heightAfterShrinking(loom.insideHeightMm - topMm - bottomMm, settings.relaxation, settings.wetShrinkage);
-    const largest = largestMm <= 0 ? 'No height fits beside the unwoven warp.' : `Up to ${findings.length(largestMm, 'down')} of cloth fit.`;
+  if (loom.insideHeightMm < heightNeededMm - HAIR_MM) {
+    const largestMm = largestHeight(loom, dowel, settings);
+    const largest = largestMm === 0 ? 'No height fits beside the unwoven warp.' : `Up to ${findings.length(largestMm, 'down')} of cloth fit.`;
     const inside = `The loom is ${findings.length(loom.insideHeightMm)} high inside.`;
     findings.reject('E_FIT', '/loom/insideHeightMm', `${inside} The piece needs ${findings.length(heightNeededMm, 'up')}. ${largest}`);
   }

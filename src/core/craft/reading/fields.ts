@@ -126,10 +126,14 @@ export class Fields {
   }
 
   optionalFlag(key: string, name: string): boolean | undefined {
+    return this.take(key) === undefined ? undefined : this.flag(key, name);
+  }
+
+  flag(key: string, name: string): boolean {
     const value = this.take(key);
-    if (value === undefined || typeof value === 'boolean') return value;
-    this.reject('E_ENUM', key, `${name} is either true or false.`);
-    return undefined;
+    if (typeof value === 'boolean') return value;
+    if (!this.#refused) this.reject('E_ENUM', key, `${name} is either true or false.`);
+    return false;
   }
 
   text(key: string, { name, maxLength }: TextRule): string {

@@ -50,18 +50,22 @@ const OVER: NumberRule = { name: 'Ends passed over', min: 2, max: 100, whole: tr
 const BACK: NumberRule = { name: 'Ends gone back under', min: 1, max: 99, whole: true };
 const TABBY_BETWEEN: NumberRule = { name: 'Picks of tabby between rows', min: 0, max: 100, whole: true };
 
-function read(fields: Fields): SoumakBand {
+/** Ends over and back, one fewer back than over at least. */
+export function readOverAndBack(fields: Fields): { readonly over: number; readonly back: number } {
   const over = fields.number('over', OVER);
   const back = fields.number('back', BACK);
   if (over !== 0 && back >= over) {
     fields.reject('E_RANGE', 'back', `A soumak stitch goes back under fewer ends than it passed over: between 1 and ${String(over - 1)} works.`);
   }
+  return { over, back };
+}
+
+function read(fields: Fields): SoumakBand {
   return {
     technique: 'soumak',
     ...readName(fields),
     yarn: readRole(fields),
-    over,
-    back,
+    ...readOverAndBack(fields),
     rows: fields.number('rows', ROWS),
     tabbyBetween: fields.number('tabbyBetween', TABBY_BETWEEN),
     tabbyYarn: readRole(fields, 'tabbyYarn'),

@@ -30,7 +30,7 @@ async function lessonUses(actor: Actor | null, mediaId: number, now: Date): Prom
        FROM series_media m
        JOIN series s ON s.id = m.series_id
        LEFT JOIN lessons l ON l.series_id = s.id AND l.taken_out_at IS NULL
-        AND EXISTS (SELECT 1 FROM lesson_versions v WHERE v.id = l.published_version_id AND JSON_CONTAINS(v.media_names, JSON_QUOTE(m.name)))
+        AND EXISTS (SELECT 1 FROM lesson_versions v WHERE v.id = l.published_version_id AND JSON_CONTAINS(JSON_EXTRACT(v.facts, '$.media[*].name'), JSON_QUOTE(m.name)))
       WHERE m.media_id = ?`,
     { replacements: [mediaId], type: QueryTypes.SELECT },
   );

@@ -1,7 +1,7 @@
 /** A series with everything that `whatIsMissing` looks at. */
 import { amountOf } from '#core/craft/amounts.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import { parseLessonText, type LessonText, type RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
+import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import type { PartInHand, SeriesInHand } from '#core/series/missing.ts';
 import { GatheringItem, Lesson, PatternPiece, SeriesMedia, type Series } from '#server/models/index.ts';
 
@@ -17,7 +17,7 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
     SeriesMedia.findAll({ where: { seriesId: series.id } }),
   ]);
   const items = await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) } });
-  const drafts = lessons.map((lesson) => ({ lesson, text: parseLessonText(lesson.draftSource) }));
+  const drafts = lessons.map((lesson) => ({ lesson, text: lesson.draftReading }));
   const plan = piece === null ? null : planPiece(piece.data);
   const names = new Set(media.map(({ name }) => name));
   const knows = (key: string): boolean => piece !== null && plan?.ok === true && amountOf(key, piece.data, plan.value).ok;

@@ -1,5 +1,4 @@
 import { parse as parseYaml } from 'yaml';
-import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
@@ -9,6 +8,8 @@ import { newPublicId } from '#server/db/public-id.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize } from '#server/errors.ts';
 import { GatheringItem, Lesson, PatternPiece, Series } from '#server/models/index.ts';
+import { readLessonText } from '#server/lesson-text/parse-pool.ts';
+import type { ParseResult } from '#server/lesson-text/serve-parses.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 
 /** Reads one file of the folder as text; null when there is none. */
@@ -17,7 +18,7 @@ export type ReadFile = (name: string) => Promise<string | null>;
 interface Checked {
   readonly file: SeriesFile;
   readonly piece: Piece | null;
-  readonly texts: readonly string[];
+  readonly texts: readonly { readonly source: string; readonly reading: ParseResult }[];
 }
 
 /**
@@ -62,7 +63,8 @@ async function writeLessons(seriesId: number, { file, texts }: Checked): Promise
       opens,
       opensAt: opens.rule === 'on-date' ? instantOfWall(opens.wall, opens.zone) : null,
       checkpoint: entry.checkpoint ?? null,
-      draftSource: texts[index] ?? '',
+      draftSource: texts[index]?.source ?? '',
+      ...(texts[index] === undefined ? {} : { draftReading: texts[index].reading }),
     });
     await GatheringItem.bulkCreate(entry.gathering.map((item, position) => ({
       lessonId: lesson.id,
@@ -82,16 +84,19 @@ async function check(read: ReadFile): Promise<Checked> {
   const fields: Record<string, string> = {};
   const file = await readSeriesFile(read);
   const piece = await readPiece(read, fields);
-  const texts: string[] = [];
+  const texts: { source: string; reading: ParseResult }[] = [];
   for (const [index, { file: name, opens }] of file.lessons.entries()) {
     const source = await read(name);
-    const parsed = source === null ? null : parseLessonText(source);
-    if (source === null || parsed === null) fields[name] = 'This file is named in series.yaml but is not in the folder.';
-    else if (!parsed.ok) fields[name] = parsed.problems.map(({ line, reason }) => `Line ${line}: ${reason}`).join(' ');
+    if (source === null) {
+      fields[name] = 'This file is named in series.yaml but is not in the folder.';
+      continue;
+    }
+    const reading = await readLessonText(source);
+    if (!reading.ok) fields[name] = reading.problems.map(({ line, reason }) => `Line ${line}: ${reason}`).join(' ');
     if (opens.rule === 'after-verdict' && (opens.part > index || file.lessons[opens.part - 1]?.checkpoint === undefined)) {
       fields[`${name} opens`] = `Part ${opens.part} is not an earlier part with a checkpoint.`;
     }
-    texts.push(source ?? '');
+    texts.push({ source, reading });
   }
   if (Object.keys(fields).length > 0) throw new AppError('VALIDATION', { says: 'This folder does not fit yet.', fields });
   return { file, piece, texts };

@@ -1,3 +1,4 @@
+import { factsOf } from '#core/lesson-text/lesson-facts.ts';
 import { whatIsMissing } from '#core/series/missing.ts';
 import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
@@ -38,7 +39,7 @@ async function publishDraft(ctx: Context, { lesson, text }: Draft): Promise<void
     number: (last ?? 0) + 1,
     source: lesson.draftSource,
     tree: text.tree,
-    mediaNames: text.media.map(({ name }) => name),
+    facts: factsOf(text),
     authorId: ctx.actor?.userId ?? null,
   });
   await lesson.update({ publishedVersionId: version.id });

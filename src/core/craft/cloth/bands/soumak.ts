@@ -13,7 +13,7 @@ import type { Weave } from '../weave.ts';
 const THINNEST_ROW = 4.4;
 
 export function drawSoumak(band: SoumakBand, height: number, weave: Weave): string {
-  const most = Math.max(1, Math.floor(height / THINNEST_ROW));
+  const most = Math.max(1, Math.floor(height / Math.max(THINNEST_ROW, weave.minPick * 1.3)));
   const rows = band.rows <= most ? Math.max(1, band.rows) : Math.max(1, most - (most % 2));
   const gaps = band.tabbyBetween > 0 ? rows - 1 : 0;
   const thick = gaps > 0 ? (height * band.soumakShare) / rows : height / rows;

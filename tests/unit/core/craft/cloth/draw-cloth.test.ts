@@ -145,7 +145,7 @@ describe('any piece a person may describe', () => {
           const height = as === 'strip' ? 400 : undefined;
           const svg = drawCloth(piece, { id: 'a', as, width: as === 'strip' ? 40 : width, woven, ...(height === undefined ? {} : { height }) });
           expect(svg).not.toMatch(/NaN|Infinity/);
-          expect(svg.length).toBeLessThan(120 * 1024);
+          expect(svg.length).toBeLessThan(60 * 1024);
         }
       }),
       { numRuns: 60 },

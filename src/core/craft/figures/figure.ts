@@ -1,0 +1,24 @@
+/** What a figure is: an explanatory line drawing of one technique, with this person's own amounts in it. */
+import type { Piece } from '../piece.ts';
+import type { Plan } from '../plan.ts';
+import type { Units } from '#core/units/format-amount.ts';
+import type { Scene } from './kit/scene.ts';
+
+export interface FigureInput {
+  readonly piece: Piece;
+  readonly plan: Plan;
+  readonly units: Units;
+}
+
+export interface Figure {
+  /** A few words: the heading of a caption. */
+  readonly title: string;
+  /** The same movement in words, with the amounts: for screen readers and under the drawing. */
+  readonly describe: (input: FigureInput) => string;
+  /** Height of the drawing; all are {@link FIGURE_WIDTH} wide. */
+  readonly height: number;
+  /** @param progress 0 before the first movement, 1 when it is done */
+  readonly draw: (scene: Scene, input: FigureInput, progress: number) => void;
+}
+
+export const FIGURE_WIDTH = 560;

@@ -1,0 +1,64 @@
+/** A butterfly: figures of eight, tied at the waist, the yarn drawn from the middle. */
+import type { Figure } from '../figure.ts';
+import { handWay, words } from '../kit/marks.ts';
+import { LEVEL } from '../kit/scene.ts';
+import type { Scene } from '../kit/scene.ts';
+import { stageOf, stages } from '../kit/stages.ts';
+import { layStrand } from '../kit/strand.ts';
+import type { Run } from '../kit/strand.ts';
+import { trail } from '../kit/trail.ts';
+import { num } from '../../cloth/markup.ts';
+import { countWords } from '../length-words.ts';
+import { techniqueColour } from '../yarns.ts';
+
+const LEFT = 150;
+const RIGHT = 410;
+const Y = 122;
+const EIGHTS = 5;
+
+export const BUTTERFLY: Figure = {
+  title: 'Butterfly',
+  height: 250,
+  describe: ({ plan }) =>
+    `Yarn wound in figures of eight round thumb and little finger, taken off and tied twice round the waist. It is drawn from the end you began with. One weaves about ${countWords(rowsPerLoad(plan.yarns), 'row', 'rows')}.`,
+  draw: (scene, input, progress) => {
+    const [wind, tie] = stages(progress, [5, 2] as const);
+    const colour = techniqueColour(input, 'tabby');
+    post(scene, LEFT, 'thumb');
+    post(scene, RIGHT, 'little finger');
+    layStrand(scene, { colour, width: 6.5, runs: [{ level: LEVEL.warp - 1, points: trail(LEFT - 96, Y + 74).bend(LEFT - 40, Y + 66, LEFT - 16, Y + 30).points }] });
+    for (let i = 0; i < EIGHTS; i++) layStrand(scene, { colour, width: 6.5, runs: eight(i) }, stageOf(wind, i, EIGHTS));
+    for (let i = 0; i < 3; i++) layStrand(scene, { colour, width: 6.5, runs: [{ level: LEVEL.tool + i, points: waist(i) }] }, stageOf(tie, i, 3));
+    if (progress < 1) return;
+    handWay(scene, trail(LEFT - 60, Y + 92).bend(LEFT - 90, Y + 100, LEFT - 124, Y + 96).points);
+    words(scene, 8, Y + 122, 'draw from here', { size: 15, quiet: true });
+    words(scene, 280, 36, 'tied at the waist', { anchor: 'middle', size: 15, quiet: true });
+  },
+};
+
+function rowsPerLoad(yarns: Readonly<Record<string, { readonly rowsPerLoad: number }>>): number {
+  return Math.max(0, ...Object.values(yarns).map((yarn) => yarn.rowsPerLoad));
+}
+
+/** A finger is a post: what matters is the way of the yarn. */
+function post(scene: Scene, x: number, text: string): void {
+  scene.add(LEVEL.ground, `<circle class="draw-line" cx="${x}" cy="${Y}" r="19" stroke="#111e33" stroke-width="1.5" stroke-dasharray="4 4"/>`);
+  words(scene, x, Y + 84, text, { anchor: 'middle' });
+}
+
+/** One figure of eight, a little wider than the one before it. */
+function eight(index: number): Run[] {
+  const out = 24 + index * 7;
+  const level = LEVEL.warp + index * 2;
+  return [
+    { level, points: trail(LEFT, Y + out).curve(LEFT + 70, Y + out, RIGHT - 70, Y - out, RIGHT, Y - out).points },
+    { level, points: trail(RIGHT, Y - out).curve(RIGHT + out * 1.3, Y - out, RIGHT + out * 1.3, Y + out, RIGHT, Y + out).points },
+    { level: level + 1, points: trail(RIGHT, Y + out).curve(RIGHT - 70, Y + out, LEFT + 70, Y - out, LEFT, Y - out).points },
+    { level: level + 1, points: trail(LEFT, Y - out).curve(LEFT - out * 1.3, Y - out, LEFT - out * 1.3, Y + out + 7, LEFT, Y + out + 7).points },
+  ];
+}
+
+function waist(index: number): { x: number; y: number }[] {
+  const x = 270 + index * 9;
+  return trail(x - 4, Y + 34).bend(x - 9, Y, x, Y - 34).points.map((p) => ({ x: Number(num(p.x)), y: p.y }));
+}

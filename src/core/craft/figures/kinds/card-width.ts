@@ -1,0 +1,59 @@
+/** Cutting strands on a card: every turn, cut along one edge, becomes a strand twice as long as the card is wide. */
+import type { Figure, FigureInput } from '../figure.ts';
+import { measure, words } from '../kit/marks.ts';
+import { LEVEL } from '../kit/scene.ts';
+import { eased, stages } from '../kit/stages.ts';
+import { tube } from '../kit/strand.ts';
+import { CARD, cutMark, flat } from '../kit/tools.ts';
+import { num } from '../../cloth/markup.ts';
+import { lengthWords } from '../length-words.ts';
+import { bandOf, bandPlanOf, techniqueColour } from '../yarns.ts';
+
+const TOP = 40;
+const BOTTOM = 160;
+const LEFT = 130;
+const RIGHT = 470;
+const TURNS = 16;
+
+export const CARD_WIDTH: Figure = {
+  title: 'Cutting strands on a card',
+  height: 266,
+  describe: (input) =>
+    `Yarn is wound round a card ${lengthWords(cardMm(input), input.units)} wide and cut along one edge. Every turn becomes one strand of ${lengthWords(cutMm(input), input.units)}.`,
+  draw: (scene, input, progress) => {
+    const [wind, cut, open] = stages(progress, [5, 2, 2] as const);
+    const colour = techniqueColour(input, 'rya');
+    scene.add(LEVEL.ground, flat(LEFT, TOP, RIGHT - LEFT, BOTTOM - TOP, CARD));
+    const step = (RIGHT - LEFT - 30) / TURNS;
+    let d = '';
+    for (let i = 0; i < Math.round(TURNS * wind); i++) {
+      const x = LEFT + 20 + i * step;
+      const end = cut >= (i + 1) / TURNS ? BOTTOM - 3 : BOTTOM + 7;
+      d += `M${num(x)} ${TOP - 7}L${num(x + 6)} ${end}`;
+    }
+    if (d !== '') scene.add(LEVEL.front, tube(d, colour, 9, ' stroke-linecap="round"'));
+    if (cut > 0 && cut < 1) cutMark(scene, LEFT + 24 + cut * (RIGHT - LEFT - 40), BOTTOM + 6);
+    measure(scene, { x: 84, y: TOP }, { x: 84, y: BOTTOM }, lengthWords(cardMm(input), input.units));
+    if (wind >= 1) words(scene, 484, BOTTOM + 5, 'cut along', { size: 15 });
+    if (wind >= 1) words(scene, 484, BOTTOM + 23, 'this edge', { size: 15 });
+    if (open > 0) {
+      const half = 8 + 190 * eased(open);
+      scene.add(LEVEL.front, tube(`M${num(280 - half)} 208H${num(280 + half)}`, colour, 9, ' stroke-linecap="round"'));
+      if (open >= 1) measure(scene, { x: 280 - half, y: 240 }, { x: 280 + half, y: 240 }, lengthWords(cutMm(input), input.units));
+    }
+  },
+};
+
+/** A cut strand of a piece without rya: shown at a common length. */
+const COMMON_CUT_MM = 240;
+const CARD_THICKNESS_MM = 2;
+
+function cutMm(input: FigureInput): number {
+  const found = bandPlanOf(input, 'rya')?.cutMm;
+  const band = bandOf(input, 'rya');
+  return Math.ceil((found ?? (band === undefined ? COMMON_CUT_MM : 2 * band.pileMm)) / 5) * 5;
+}
+
+function cardMm(input: FigureInput): number {
+  return Math.ceil((cutMm(input) / 2 - CARD_THICKNESS_MM) / 5) * 5;
+}

@@ -1,0 +1,42 @@
+/** Doubled ends: two neighbours are always taken up as one. */
+import type { Figure, FigureInput } from '../figure.ts';
+import { measure, words } from '../kit/marks.ts';
+import { rowRuns } from '../kit/rows.ts';
+import { LEVEL } from '../kit/scene.ts';
+import { layStrand } from '../kit/strand.ts';
+import { needleAt } from '../kit/tools.ts';
+import { layWarp, warpColour } from '../kit/warp.ts';
+import type { WarpLines } from '../kit/warp.ts';
+import { num } from '../../cloth/markup.ts';
+import { lengthWords } from '../length-words.ts';
+import { techniqueColour } from '../yarns.ts';
+
+const WARP: WarpLines = { x: 64, step: 48, count: 10, top: 12, bottom: 206 };
+
+export const DOUBLED_ENDS: Figure = {
+  title: 'Doubled ends',
+  height: 270,
+  describe: (input) =>
+    `Two neighbouring ends count as one: the weft goes over two and under two. From one pair to the next is ${lengthWords(pairMm(input), input.units)}.`,
+  draw: (scene, input, progress) => {
+    layWarp(scene, WARP, warpColour(input));
+    const rows = rowRuns(WARP, [
+      { y: 150, from: 9, to: 0, overEven: true, together: 2, out: 16 },
+      { y: 118, from: 0, to: 9, overEven: false, together: 2, out: 16 },
+      { y: 86, from: 9, to: 0, overEven: true, together: 2, out: 16 },
+    ]);
+    const tip = layStrand(scene, { colour: techniqueColour(input, 'tabby'), width: 13, runs: rows }, progress);
+    if (progress < 1) needleAt(scene, tip);
+    for (let pair = 0; pair < 5; pair++) {
+      const a = WARP.x + WARP.step * 2 * pair;
+      scene.add(LEVEL.marks, `<path class="draw-line" d="M${num(a - 6)} 212q0 12 12 12h${num(WARP.step / 2 - 6)}v8v-8h${num(WARP.step / 2 - 6)}q12 0 12-12" stroke="#111e33" stroke-width="1.5"/>`);
+      words(scene, a + WARP.step / 2, 252, String(pair + 1), { anchor: 'middle' });
+    }
+    const first = WARP.x + WARP.step / 2;
+    measure(scene, { x: first + WARP.step * 2, y: 32 }, { x: first + WARP.step * 4, y: 32 }, lengthWords(pairMm(input), input.units));
+  },
+};
+
+function pairMm(input: FigureInput): number {
+  return input.piece.warp.endsTogether === 2 ? input.plan.ends.spacingMm : 2 * input.plan.ends.spacingMm;
+}

@@ -1,0 +1,38 @@
+/** The finished piece on the wall: one cord from two points, the dowel level, a fixing that is strong enough. */
+import type { Figure } from '../figure.ts';
+import { guide, pointer, words } from '../kit/marks.ts';
+import { LEVEL } from '../kit/scene.ts';
+import { clothPieceOf } from '../../cloth/cloth-piece-of.ts';
+import { drawCloth } from '../../cloth/draw-cloth.ts';
+import { lengthWords } from '../length-words.ts';
+
+const WIDTH = 220;
+const LEFT = 30;
+/** The fixing holds this many times the mass of the piece. */
+const SAFETY = 4;
+
+export const HANGING: Figure = {
+  title: 'Hanging',
+  height: 370,
+  describe: ({ plan, units }) => {
+    const cord = plan.cut.cordMm === undefined ? 'One cord' : `One cord of ${lengthWords(plan.cut.cordMm, units)}`;
+    return `${cord} is tied near both ends of the dowel, and the dowel hangs level. The piece weighs about ${grams(plan.massG)}; the fixing should hold at least ${grams(plan.massG * SAFETY)}.`;
+  },
+  draw: (scene, input, progress) => {
+    const { plan, units } = input;
+    const svg = drawCloth(clothPieceOf(input.piece, plan, ''), { id: `${scene.id}-hung`, as: 'hanging', width: WIDTH, decorative: true });
+    scene.add(LEVEL.ground, `<svg x="${LEFT}" y="14" overflow="visible"${svg.slice(4)}`);
+    scene.add(LEVEL.marks, `<circle cx="${LEFT + WIDTH / 2}" cy="16" r="5" fill="#36424c"/>`);
+    guide(scene, `M8 35H${LEFT + WIDTH + 30}`);
+    const lines: string[] = [];
+    if (plan.cut.dowel !== undefined) lines.push(`dowel, ${lengthWords(plan.cut.dowel.lengthMm, units)}, level`);
+    if (plan.cut.cordMm !== undefined) lines.push(`cord, ${lengthWords(plan.cut.cordMm, units)} to cut`);
+    lines.push(`the piece: about ${grams(plan.massG)}`, `the fixing holds ${grams(plan.massG * SAFETY)} or more`, 'out of reach of small children');
+    lines.slice(0, Math.max(1, Math.ceil(lines.length * progress))).forEach((line, index) => words(scene, 310, 76 + index * 34, line, { size: 16, quiet: index > 1 }));
+    pointer(scene, { x: 302, y: 70 }, { x: LEFT + WIDTH + 2, y: 38 });
+  },
+};
+
+function grams(mass: number): string {
+  return mass >= 1000 ? `${Math.round(mass / 100) / 10} kg` : `${Math.round(mass / 10) * 10} g`;
+}

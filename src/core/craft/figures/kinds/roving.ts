@@ -1,0 +1,59 @@
+/** Roving: a very thick weft that goes over and under several ends at once and is puffed up where it lies in front. */
+import type { Figure, FigureInput } from '../figure.ts';
+import { measureBeside, words } from '../kit/marks.ts';
+import { layField } from '../kit/rows.ts';
+import { LEVEL } from '../kit/scene.ts';
+import { layStrand } from '../kit/strand.ts';
+import type { Run } from '../kit/strand.ts';
+import { trail } from '../kit/trail.ts';
+import { endX, layWarp, warpColour } from '../kit/warp.ts';
+import type { WarpLines } from '../kit/warp.ts';
+import { countWords, lengthWords } from '../length-words.ts';
+import { bandOf, roleColour, techniqueColour } from '../yarns.ts';
+
+const WARP: WarpLines = { x: 52, step: 38, count: 13, top: 8, bottom: 238 };
+const Y = 140;
+const THICK = 32;
+
+export const ROVING: Figure = {
+  title: 'Roving',
+  height: 250,
+  describe: (input) => {
+    const { over, bulgeMm } = rovingOf(input);
+    return `Unspun roving goes over ${countWords(over, 'end', 'ends')} and under ${over}, without pulling, and is puffed up to about ${lengthWords(bulgeMm, input.units)} where it lies in front.`;
+  },
+  draw: (scene, input, progress) => {
+    const { over, bulgeMm } = rovingOf(input);
+    layWarp(scene, WARP, warpColour(input));
+    layField(scene, WARP, { colour: roleColour(input, bandOf(input, 'tabby')?.yarn, '#93a8a6'), width: 12.5, bottom: 222, pitch: 17, rows: 3, first: 0, last: 12, out: 18 });
+    layStrand(scene, { colour: techniqueColour(input, 'roving'), width: THICK, runs: rovingRuns(over) }, progress);
+    if (progress < 1) return;
+    words(scene, endX(WARP, (over - 1) / 2), 62, `over ${over}`, { anchor: 'middle', patch: true });
+    words(scene, endX(WARP, over + (over - 1) / 2), 62, `under ${over}`, { anchor: 'middle', patch: true });
+    measureBeside(scene, { x: 536, y: Y }, { x: 536, y: Y - 38 }, lengthWords(bulgeMm, input.units), { x: 546, y: Y - 52 }, 'end');
+  },
+};
+
+function rovingOf(input: FigureInput): { over: number; bulgeMm: number } {
+  const band = bandOf(input, 'roving');
+  return { over: Math.max(2, Math.min(4, band?.over ?? 3)), bulgeMm: band?.bulgeMm ?? 12 };
+}
+
+function rovingRuns(over: number): Run[] {
+  const runs: Run[] = [];
+  for (let start = 0, front = true; start < WARP.count; start += over, front = !front) {
+    const last = Math.min(WARP.count, start + over);
+    const a = endX(WARP, start) - WARP.step / 2;
+    const b = endX(WARP, last - 1) + WARP.step / 2;
+    const lift = front ? 38 : 0;
+    runs.push({ level: front ? LEVEL.front : LEVEL.behind, points: bulge(a, b, lift) });
+  }
+  return runs;
+}
+
+/** Level at both ends, so that it goes on smoothly behind the next ends. */
+function bulge(a: number, b: number, lift: number): Run['points'] {
+  const middle = (a + b) / 2;
+  const soft = (b - a) * 0.26;
+  return trail(a, Y).curve(a + soft, Y, a + soft * 0.9, Y - lift, middle, Y - lift).curve(b - soft * 0.9, Y - lift, b - soft, Y, b, Y).points;
+}

@@ -1,0 +1,68 @@
+/** The spacer card: woven in like a broad row, pushed down to the nails, with the spacing row twined along its upper edge. */
+import type { Figure } from '../figure.ts';
+import { handWay, measure, nail, wood, words } from '../kit/marks.ts';
+import { LEVEL } from '../kit/scene.ts';
+import type { Scene } from '../kit/scene.ts';
+import { eased, stages } from '../kit/stages.ts';
+import { layStrand } from '../kit/strand.ts';
+import type { Run } from '../kit/strand.ts';
+import { CARD, flat } from '../kit/tools.ts';
+import { trail } from '../kit/trail.ts';
+import { endX, layWarp, warpColour } from '../kit/warp.ts';
+import type { WarpLines } from '../kit/warp.ts';
+import { num } from '../../cloth/markup.ts';
+import { lengthWords } from '../length-words.ts';
+
+const WARP: WarpLines = { x: 120, step: 40, count: 9, top: 10, bottom: 240 };
+const CARD_HEIGHT = 76;
+const LEFT = 88;
+const WIDTH = 384;
+const HIGH = 44;
+const LOW = 152;
+
+export const SPACER_CARD: Figure = {
+  title: 'Spacer card and spacing row',
+  height: 300,
+  describe: ({ plan, units }) =>
+    `A card ${lengthWords(plan.cut.spacerCard.widthMm, units)} long and ${lengthWords(plan.cut.spacerCard.heightMm, units)} high goes over one end and under the next, down to the lower nails. A twined row on its upper edge holds the ends evenly apart.`,
+  draw: (scene, input, progress) => {
+    const [slide, push, twine] = stages(progress, [3, 2, 4] as const);
+    const { spacerCard } = input.plan.cut;
+    scene.add(LEVEL.ground, wood(0, 228, 560, 36));
+    for (let i = 0; i < 5; i++) scene.add(LEVEL.ground + 1, nail(endX(WARP, i * 2), 240));
+    layWarp(scene, WARP, warpColour(input));
+    const x = LEFT + (1 - eased(slide)) * 460;
+    const y = HIGH + (LOW - HIGH) * eased(push);
+    layCard(scene, x, y);
+    layTwining(scene, warpColour(input), twine);
+    if (slide > 0 && slide < 1) handWay(scene, trail(540, HIGH - 18).to(480, HIGH - 18).points);
+    if (push > 0 && push < 1) handWay(scene, trail(516, HIGH + 20).to(516, LOW).points);
+    if (push >= 1) measure(scene, { x: 62, y: LOW }, { x: 62, y: LOW + CARD_HEIGHT }, lengthWords(spacerCard.heightMm, input.units));
+    if (twine >= 1) words(scene, 484, LOW - 4, 'spacing row', { quiet: true, size: 14 });
+    if (push >= 1) measure(scene, { x: LEFT, y: 284 }, { x: LEFT + WIDTH, y: 284 }, lengthWords(spacerCard.widthMm, input.units));
+  },
+};
+
+function layCard(scene: Scene, x: number, y: number): void {
+  scene.add(LEVEL.behind, flat(x, y, WIDTH, CARD_HEIGHT, CARD));
+  for (let i = 0; i < WARP.count; i += 2) {
+    const at = endX(WARP, i);
+    if (at < x + 6 || at > x + WIDTH - 6) continue;
+    scene.add(LEVEL.front, `<path d="M${num(at - 9)} ${num(y + 0.8)}h18v${num(CARD_HEIGHT - 1.6)}h-18z" fill="${CARD}"/><path class="draw-edge" d="M${num(at - 9)} ${num(y)}h18M${num(at - 9)} ${num(y + CARD_HEIGHT)}h18" stroke="#111e33" stroke-width="1.6"/>`);
+  }
+}
+
+/** Two strands that cross between every two ends: each is in front where the other is behind. */
+function layTwining(scene: Scene, colour: string, share: number): void {
+  const y = LOW - 7;
+  for (const odd of [0, 1]) {
+    const runs: Run[] = [];
+    for (let i = 0; i < WARP.count; i++) {
+      const inFront = i % 2 === odd;
+      const x = endX(WARP, i);
+      const [a, b] = inFront ? [y + 3, y - 3] : [y - 3, y + 3];
+      runs.push({ level: inFront ? LEVEL.front + 1 : LEVEL.behind + 1, points: trail(x - 20, a).bend(x, inFront ? y + 1 : y - 1, x + 20, b).points });
+    }
+    layStrand(scene, { colour, width: 4.4, runs }, share);
+  }
+}

@@ -1,0 +1,45 @@
+/** Tabby: over one, under the next, the row after it the other way about, each row laid in hills and then pressed down. */
+import type { Figure } from '../figure.ts';
+import { handWay, words } from '../kit/marks.ts';
+import { rowRuns } from '../kit/rows.ts';
+import { layStrand } from '../kit/strand.ts';
+import { needleAt } from '../kit/tools.ts';
+import { trail } from '../kit/trail.ts';
+import { layWarp, warpColour } from '../kit/warp.ts';
+import type { WarpLines } from '../kit/warp.ts';
+import { lengthWords } from '../length-words.ts';
+import { techniqueColour } from '../yarns.ts';
+
+const WARP: WarpLines = { x: 72, step: 46, count: 9, top: 12, bottom: 258 };
+const PITCH = 19;
+const HILL = 36;
+
+export const TABBY: Figure = {
+  title: 'Tabby',
+  height: 270,
+  describe: ({ plan, units }) =>
+    `The weft goes over one end and under the next; the row after it does the opposite. Each row is laid in hills and then pressed down, so that it takes ${lengthWords(plan.weft.pickMm, units)} of yarn.`,
+  draw: (scene, input, progress) => {
+    layWarp(scene, WARP, warpColour(input));
+    const y = (row: number): number => 236 - row * PITCH;
+    const rows = rowRuns(WARP, [
+      { y: y(0), from: 8, to: 0, overEven: true, out: 18 },
+      { y: y(1), from: 0, to: 8, overEven: false, out: 18 },
+      { y: y(2), from: 8, to: 0, overEven: true, out: 18 },
+      { y: y(3), from: 0, to: 8, overEven: false, out: 18 },
+      { y: y(4) - 10, from: 8, to: 0, overEven: true, out: 18, rise: hills },
+    ]);
+    const tip = layStrand(scene, { colour: techniqueColour(input, 'tabby'), width: 13.5, runs: rows }, progress);
+    if (progress < 1) needleAt(scene, tip);
+    if (progress >= 1) {
+      words(scene, 280, 34, 'laid in hills, then pressed down', { anchor: 'middle', patch: true });
+      for (const x of [141, 279, 417]) handWay(scene, trail(x, 62).to(x, 100).points);
+    }
+  },
+};
+
+/** Three hills over the width, level with the row at both edges and between the hills. */
+function hills(x: number): number {
+  const across = ((x - WARP.x) / (WARP.step * (WARP.count - 1))) * 3;
+  return across <= 0 || across >= 3 ? 0 : HILL * Math.abs(Math.sin(across * Math.PI));
+}

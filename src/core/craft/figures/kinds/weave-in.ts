@@ -1,0 +1,43 @@
+/** Running a tail in at the back: up beside one end, under four rows, and cut. */
+import type { Figure } from '../figure.ts';
+import { words } from '../kit/marks.ts';
+import { layField } from '../kit/rows.ts';
+import { LEVEL } from '../kit/scene.ts';
+import { stages } from '../kit/stages.ts';
+import { layStrand } from '../kit/strand.ts';
+import type { Run } from '../kit/strand.ts';
+import { cutMark, needleAt } from '../kit/tools.ts';
+import { trail } from '../kit/trail.ts';
+import { endX, layWarp, warpColour } from '../kit/warp.ts';
+import type { WarpLines } from '../kit/warp.ts';
+import { shapeColours } from '../yarns.ts';
+
+const WARP: WarpLines = { x: 76, step: 51, count: 9, top: 8, bottom: 256 };
+const PITCH = 24;
+const BOTTOM = 236;
+const ROWS = 9;
+/** Rows the tail passes under. */
+const UNDER = 4;
+
+export const WEAVE_IN: Figure = {
+  title: 'Running in a tail',
+  height: 268,
+  describe: () => 'Seen from the back. The needle runs the tail up beside one end, under four rows, and comes out; the tail is cut off there.',
+  draw: (scene, input, progress) => {
+    const { ground, first } = shapeColours(input);
+    const [run, cut] = stages(progress, [4, 1] as const);
+    layWarp(scene, WARP, warpColour(input));
+    layField(scene, WARP, { colour: ground, width: 15, bottom: BOTTOM, pitch: PITCH, rows: ROWS, first: 0, last: 8, out: 18 });
+    const x = endX(WARP, 4) + 11;
+    const runs: Run[] = [{ level: LEVEL.above, points: trail(x + 96, BOTTOM + 14).curve(x + 60, BOTTOM - 8, x + 6, BOTTOM + 2, x, BOTTOM - PITCH * 0.9).points }];
+    const from = BOTTOM - PITCH * 0.9;
+    const to = from - PITCH * (UNDER + 0.2);
+    runs.push({ level: LEVEL.warp + 1, points: trail(x, from).to(x, to).points });
+    runs.push({ level: LEVEL.above, points: trail(x, to).bend(x + 2, to - 18, x + 20, to - 28).points });
+    const tip = layStrand(scene, { colour: first, width: 9, runs }, run);
+    if (run < 1) needleAt(scene, tip);
+    if (cut > 0) cutMark(scene, x + 22, to - 30);
+    if (progress >= 1) words(scene, x + 44, to - 22, 'cut here', { patch: true, size: 15 });
+    words(scene, 548, 24, 'the back of the cloth', { anchor: 'end', patch: true, quiet: true, size: 15 });
+  },
+};

@@ -1,0 +1,51 @@
+/** Rows that follow each other with one thread, turning round the last end each time. */
+import { LEVEL } from './scene.ts';
+import type { Scene } from './scene.ts';
+import { layStrand } from './strand.ts';
+import type { Run, Tip } from './strand.ts';
+import { trail } from './trail.ts';
+import { pickRuns } from './warp.ts';
+import type { Pick, WarpLines } from './warp.ts';
+
+/** The runs of several rows and of the turns between them. Each row must begin at the side where the one before it ended. */
+export function rowRuns(warp: WarpLines, picks: readonly Pick[]): Run[] {
+  const runs: Run[] = [];
+  for (const pick of picks) {
+    const own = pickRuns(warp, pick);
+    const from = runs.at(-1)?.points.at(-1);
+    const to = own[0]?.points[0];
+    if (from !== undefined && to !== undefined) {
+      const side = pick.to >= pick.from ? -1 : 1;
+      const out = Math.max(5, Math.abs(from.y - to.y) * 0.45);
+      const x = side < 0 ? Math.min(from.x, to.x) : Math.max(from.x, to.x);
+      runs.push({ level: LEVEL.behind, points: trail(from.x, from.y).curve(x + side * out, from.y, x + side * out, to.y, to.x, to.y).points });
+    }
+    runs.push(...own);
+  }
+  return runs;
+}
+
+interface Field {
+  readonly colour: string;
+  readonly width: number;
+  /** Lowest row, and the distance from row to row. */
+  readonly bottom: number;
+  readonly pitch: number;
+  readonly rows: number;
+  readonly first: number;
+  readonly last: number;
+  readonly share?: number;
+  readonly out?: number;
+}
+
+/** A stretch of plain cloth from the lowest row up, the first row running to the right. */
+export function layField(scene: Scene, warp: WarpLines, field: Field): Tip | undefined {
+  const picks = Array.from({ length: field.rows }, (_, row): Pick => ({
+    y: field.bottom - row * field.pitch,
+    from: row % 2 === 0 ? field.first : field.last,
+    to: row % 2 === 0 ? field.last : field.first,
+    overEven: row % 2 === 0,
+    ...(field.out === undefined ? {} : { out: field.out }),
+  }));
+  return layStrand(scene, { colour: field.colour, width: field.width, runs: rowRuns(warp, picks) }, field.share ?? 1);
+}

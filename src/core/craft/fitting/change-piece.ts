@@ -1,0 +1,80 @@
+/** The pattern with a student's own loom, width and yarns put in. Nothing is reckoned yet. */
+import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
+import type { Band, Loom, Piece, Shape, Warp, Yarn } from '#core/craft/piece.ts';
+
+const isAboveZero = (x: number | undefined): x is number => x !== undefined && Number.isFinite(x) && x > 0;
+
+/**
+ * Which nails of her own loom come closest to the pattern's spacing: a loom with nails
+ * twice as close is warped on every second one.
+ */
+export function nthNailFor(patternPitchMm: number, ownPitchMm: number): number {
+  return isAboveZero(ownPitchMm) ? Math.min(50, Math.max(1, Math.round(patternPitchMm / ownPitchMm))) : 1;
+}
+
+function changeLoom(pattern: Loom, mine: MyPiece['loom']): Loom {
+  const own = { ...pattern, ...mine };
+  if (mine?.nailPitchMm === undefined) return own;
+  const nth = nthNailFor(pattern.nailPitchMm * (pattern.everyNthNail ?? 1), mine.nailPitchMm);
+  const { everyNthNail: _, ...allNails } = own;
+  return nth === 1 ? allNails : { ...allNails, everyNthNail: nth };
+}
+
+/** The pattern pins its ends for its own loom; on another one they are reckoned anew. */
+function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
+  const own = { ...warp, ...(mine.endsTogether === undefined ? {} : { endsTogether: mine.endsTogether }) };
+  const asPinned = mine.widthMm === undefined && mine.endsTogether === undefined && mine.loom?.nailPitchMm === undefined && mine.loom?.warping === undefined;
+  return endCount !== undefined && asPinned ? { ...own, endCount } : own;
+}
+
+/** Shapes keep their place and their share of the width; how high they stand stays, but a circle stays round. */
+function narrowShape(shape: Shape, scale: number): Shape {
+  const measures =
+    shape.shape === 'circle'
+      ? { shape: shape.shape, radiusMm: shape.radiusMm * Math.min(1, scale) }
+      : { shape: shape.shape, baseMm: shape.baseMm * scale, heightMm: shape.heightMm };
+  const { baseMm: _base, heightMm: _height, radiusMm: _radius, shape: _shape, ...placing } = shape;
+  return {
+    ...placing,
+    ...measures,
+    ...(shape.centreMm === undefined ? {} : { centreMm: shape.centreMm * scale }),
+    ...(shape.leanMm === undefined ? {} : { leanMm: shape.leanMm * scale }),
+  };
+}
+
+function narrowBand(band: Band, scale: number): Band {
+  if (band.technique !== 'tabby' || band.shapes === undefined) return band;
+  return { ...band, shapes: band.shapes.map((shape) => narrowShape(shape, scale)) };
+}
+
+/** Her yarn takes the pattern's colour where she has not said her own, so that the picture stays readable. */
+function changeYarns(pattern: Piece['yarns'], mine: NonNullable<MyPiece['yarns']>): Piece['yarns'] {
+  const entries = Object.entries(pattern).map(([role, patternYarn]): [string, Yarn] => {
+    const own = Object.hasOwn(mine, role) ? mine[role] : undefined;
+    if (own === undefined) return [role, patternYarn];
+    return [role, patternYarn.colour === undefined ? own : { colour: patternYarn.colour, ...own }];
+  });
+  return Object.fromEntries(entries);
+}
+
+/** Roles she has a yarn for that the pattern does not know. */
+export function unknownRoles(pattern: Piece, mine: MyPiece): readonly string[] {
+  return Object.keys(mine.yarns ?? {}).filter((role) => !Object.hasOwn(pattern.yarns, role));
+}
+
+/** Whatever a student typed goes in as it is; planning the piece tells what is wrong with it. */
+export function changePiece(pattern: Piece, mine: MyPiece): Piece {
+  const widthMm = mine.widthMm ?? pattern.size.widthMm;
+  const scale = isAboveZero(mine.widthMm) ? mine.widthMm / pattern.size.widthMm : 1;
+  const { dowel } = pattern;
+  const lengthMm = dowel?.lengthMm === undefined ? undefined : dowel.lengthMm + (scale - 1) * pattern.size.widthMm;
+  return {
+    ...pattern,
+    size: { ...pattern.size, widthMm },
+    loom: changeLoom(pattern.loom, mine.loom),
+    warp: changeWarp(pattern.warp, mine),
+    ...(dowel === undefined ? {} : { dowel: lengthMm === undefined ? dowel : { ...dowel, lengthMm } }),
+    yarns: changeYarns(pattern.yarns, mine.yarns ?? {}),
+    bands: scale === 1 ? pattern.bands : pattern.bands.map((band) => narrowBand(band, scale)),
+  };
+}

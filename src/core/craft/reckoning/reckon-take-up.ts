@@ -1,0 +1,68 @@
+/** How much both yarns of a plain weave bend, and how long that makes them. */
+import { weftWaveRange, waveOf, type Wave, type WaveRange } from '#core/craft/crimp.ts';
+import { chooseWeftWave } from '#core/craft/picks.ts';
+import type { Fields } from '#core/craft/reading/fields.ts';
+import { fineLength, PICK_SPACING, SPACING, WARP_DIAMETER } from '#core/craft/reckoning/rules.ts';
+import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
+import type { Problem } from '#core/outcome.ts';
+
+export interface TakeUpAnswer {
+  /** Heights the weft's wave can have. */
+  readonly waveMm: WaveRange;
+  readonly weft: Wave;
+  readonly warp: Wave;
+  readonly warnings: readonly Problem[];
+}
+
+interface Cloth {
+  readonly D: number;
+  readonly p1: number;
+  readonly p2: number;
+}
+
+/** The weft's wave as given: inside what its yarns allow. */
+function givenWave(heightMm: number, { D, p1, p2 }: Cloth, range: WaveRange, fields: Fields): number | undefined {
+  if (heightMm > D * (1 + 1e-12)) {
+    fields.reject('E_RANGE', 'weftWaveMm', `A wave is at most as high as both yarns together: up to ${fields.findings.length(D)} works.`);
+    return undefined;
+  }
+  const hair = 1e-9 * Math.max(D, p1, p2);
+  if (heightMm < range.min - hair || heightMm > range.max + hair) {
+    const allowed = `between ${fields.findings.length(range.min)} and ${fields.findings.length(range.max)}`;
+    fields.reject('E_JAM', 'weftWaveMm', `The yarns jam at that wave. ${allowed.charAt(0).toUpperCase()}${allowed.slice(1)} works.`);
+    return undefined;
+  }
+  return heightMm;
+}
+
+function readCloth(fields: Fields): Cloth {
+  return {
+    D: fields.number('warpDiameterMm', WARP_DIAMETER) + fields.number('weftDiameterMm', fineLength('Thickness of the weft')),
+    p1: fields.number('warpSpacingMm', SPACING),
+    p2: fields.number('weftSpacingMm', PICK_SPACING),
+  };
+}
+
+export function reckonTakeUp(fields: Fields): TakeUpAnswer | undefined {
+  const { findings } = fields;
+  const cloth = findings.soundly(() => readCloth(fields));
+  const given = fields.optionalNumber('weftWaveMm', { name: 'Height of the weft’s wave', min: 0, max: LONGEST_MM, unit: 'mm' });
+  const mode = fields.optionalChoice('mode', 'Mode', ['straight-warp', 'balanced']) ?? 'straight-warp';
+  fields.end();
+  if (cloth === undefined || findings.count > 0) return undefined;
+  const range = weftWaveRange(cloth.D, cloth.p1, cloth.p2);
+  const chosen = range && (given === undefined ? chooseWeftWave(range, cloth.D, mode) : { heightMm: givenWave(given, cloth, range, fields), clamped: false });
+  if (range === undefined || chosen === undefined) {
+    fields.reject('E_JAM', 'warpSpacingMm', 'Yarns this thick cannot lie so close. Set the ends further apart, or take thinner yarn.');
+    return undefined;
+  }
+  if (chosen.heightMm === undefined) return undefined;
+  if (chosen.clamped) findings.warn('W_CLAMPED', '/mode', 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
+  const weft = waveOf(cloth.p1, cloth.D, chosen.heightMm);
+  const warp = waveOf(cloth.p2, cloth.D, cloth.D - chosen.heightMm);
+  if (weft === undefined || warp === undefined) {
+    fields.reject('E_JAM', 'weftSpacingMm', 'Rows this close jam. Let them lie further apart, or take thinner yarn.');
+    return undefined;
+  }
+  return { waveMm: range, weft, warp, warnings: findings.warnings };
+}

@@ -1,0 +1,21 @@
+/** The body of a machine's request, by a contract. */
+import type { z } from 'astro/zod';
+import { AppError } from '#server/errors.ts';
+import { fieldSentences } from '#server/web/form.ts';
+
+const MOST_BYTES = 64 * 1_024;
+
+/** @throws TOO_LARGE beyond 64 KiB; VALIDATION for what is no JSON or does not fit, by field. */
+export async function readJson<S extends z.ZodTypeAny>(request: Request, schema: S): Promise<z.output<S>> {
+  const text = await request.text();
+  if (Buffer.byteLength(text) > MOST_BYTES) throw new AppError('TOO_LARGE', { says: 'At most 64 KiB work here.' });
+  let data: unknown;
+  try {
+    data = JSON.parse(text);
+  } catch {
+    throw new AppError('VALIDATION', { says: 'This is no JSON.' });
+  }
+  const parsed = schema.safeParse(data);
+  if (!parsed.success) throw new AppError('VALIDATION', { fields: fieldSentences(parsed.error) });
+  return parsed.data;
+}

@@ -1,0 +1,72 @@
+import { describe, expect, it } from 'vitest';
+import { drawFigure } from '#core/craft/figures/draw-figure.ts';
+import { FIGURE_KINDS, isFigureKind } from '#core/craft/figures/figure-kinds.ts';
+import { FIGURES } from '#core/craft/figures/figures.ts';
+import { INPUT, PIECE } from './figure-input.ts';
+
+const wordsIn = (svg: string): string => [...svg.matchAll(/<text[^>]*>([^<]*)</g)].map((found) => found[1]).join(' | ');
+
+describe.each(FIGURE_KINDS)('the figure "%s"', (kind) => {
+  it('is drawn at every moment of its movement without a broken number, a style or a script', () => {
+    for (let step = 0; step <= 20; step++) {
+      const svg = drawFigure(kind, INPUT, step / 20);
+      expect(svg).not.toMatch(/NaN|undefined|Infinity|\sstyle=|<script|\son\w+=/);
+      expect(svg.length).toBeLessThan(60 * 1024);
+    }
+  });
+
+  it('grows: the end shows more than the beginning', () => {
+    expect(drawFigure(kind, INPUT, 1).length).toBeGreaterThan(drawFigure(kind, INPUT, 0).length);
+  });
+
+  it('is the same every time', () => {
+    expect(drawFigure(kind, INPUT, 0.6)).toBe(drawFigure(kind, INPUT, 0.6));
+  });
+
+  it('says in words what it shows', () => {
+    expect(FIGURES[kind].describe(INPUT)).toMatch(/^[A-Z\d].{40,}\.$/s);
+    expect(drawFigure(kind, INPUT)).toContain('role="img" aria-label="');
+    expect(drawFigure(kind, INPUT, 1, { decorative: true })).toContain('aria-hidden="true"');
+  });
+
+  it('stands in this person\'s own units', () => {
+    const metric = FIGURES[kind].describe(INPUT) + wordsIn(drawFigure(kind, INPUT));
+    const imperial = FIGURES[kind].describe({ ...INPUT, units: 'in' }) + wordsIn(drawFigure(kind, { ...INPUT, units: 'in' }));
+    expect(imperial).not.toMatch(/\d ?(mm|cm)\b/);
+    if (/\d ?(mm|cm)\b/.test(metric)) expect(imperial).toMatch(/\d in\b/);
+  });
+
+  it('does without a technique the piece does not use', () => {
+    const bare = { ...INPUT, piece: { ...PIECE, bands: [], yarns: {} }, plan: { ...INPUT.plan, bands: [], yarns: {} } };
+    expect(drawFigure(kind, bare)).not.toMatch(/NaN|undefined|Infinity/);
+  });
+});
+
+describe('figures', () => {
+  it('carry the amounts of the plan', () => {
+    expect(wordsIn(drawFigure('warping', INPUT))).toContain('62 ends: 32 nails above, 31 below');
+    expect(wordsIn(drawFigure('spacer-card', INPUT))).toContain('32.5 cm');
+    expect(FIGURES['card-width'].describe(INPUT)).toContain('36.5 cm');
+    expect(FIGURES.soumak.describe(INPUT)).toContain('over 4 ends and back under 2');
+  });
+
+  it('follow the loom: two neighbouring nails are wound otherwise than every nail', () => {
+    const twoNail = { ...INPUT, piece: { ...PIECE, loom: { ...PIECE.loom, warping: 'two-nail' as const } } };
+    expect(drawFigure('warping', twoNail)).not.toBe(drawFigure('warping', INPUT));
+  });
+
+  it('bring a ground of their own when they stand alone', () => {
+    expect(drawFigure('tabby', INPUT, 1, { standalone: true })).toContain('fill="#f0f3f2"');
+    expect(drawFigure('tabby', INPUT, 1)).not.toContain('M0 0H560V270');
+  });
+
+  it('count progress outside of 0 to 1 as its nearer end', () => {
+    expect(drawFigure('tabby', INPUT, 7)).toBe(drawFigure('tabby', INPUT, 1));
+    expect(drawFigure('tabby', INPUT, -1)).toBe(drawFigure('tabby', INPUT, 0));
+  });
+
+  it('are known by their names only', () => {
+    expect(isFigureKind('rya-knot')).toBe(true);
+    expect(isFigureKind('constructor')).toBe(false);
+  });
+});

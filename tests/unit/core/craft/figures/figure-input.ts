@@ -1,0 +1,43 @@
+// A small piece and its numbers, as a figure needs them. The numbers are plausible, not reckoned.
+import type { Piece } from '#core/craft/piece.ts';
+import type { Plan } from '#core/craft/plan.ts';
+import type { FigureInput } from '#core/craft/figures/figure.ts';
+
+export const PIECE: Piece = {
+  craft: 'frame-loom',
+  size: { widthMm: 300, heightMm: 400 },
+  loom: { nailPitchMm: 10, warping: 'zigzag', insideHeightMm: 520, insideWidthMm: 400 },
+  warp: { yarn: { tex: 400, colour: '#d8d2c1' } },
+  beat: { picksPerWeftDiameter: 0.7 },
+  yarns: {
+    ground: { metresPer100g: 180, colour: '#93a8a6' },
+    sand: { metresPer100g: 180, colour: '#cdbb94' },
+    foam: { metresPer100g: 100, colour: '#e6e4d8' },
+    ridge: { metresPer100g: 100, colour: '#2f5366' },
+  },
+  bands: [
+    { technique: 'hem-stitch', yarn: 'ground', bundleEnds: 2, reachPicks: 2 },
+    { technique: 'rya', yarn: 'foam', strands: 3, legEnds: 1, pileMm: 150, trimMm: 10, rows: 1, heightMm: 6 },
+    { technique: 'tabby', yarn: 'ground', heightMm: 120, shapes: [{ shape: 'triangle', yarn: 'sand', baseMm: 150, heightMm: 100 }] },
+    { technique: 'soumak', yarn: 'ridge', over: 4, back: 2, rows: 4, tabbyBetween: 0, tabbyYarn: 'ground' },
+  ],
+};
+
+const band = (index: number, technique: Plan['bands'][number]['technique'], heightMm: number, picks: number): Plan['bands'][number] => ({
+  index, technique, heightMm, picks, yarnMm: {},
+});
+
+export const PLAN: Plan = {
+  ends: { count: 62, working: 62, raw: 61.2, spacingMm: 5, nailsTop: 32, nailsBottom: 31, woundWidthMm: 305, loomWidthMm: 306 },
+  loom: { insideWidthNeededMm: 350, heightOnLoomMm: 408, heightNeededMm: 508, topMm: 40, bottomMm: 60 },
+  weft: { diameterSumMm: 1.8, pickSpacingMm: 1.45, tightness: 0.36, crimp: 0.066, stepMm: 5.33, turnMm: 3.2, pickMm: 328.5, rawPicks: 83 },
+  warp: { netMm: 32770, withMarginMm: 36000, massG: 13 },
+  yarns: { ground: { netMm: 73915, withMarginMm: 85000, massG: 41, loads: 10, rowsPerLoad: 24 } },
+  bands: [band(0, 'hem-stitch', 0, 0), { ...band(1, 'rya', 6, 0), cutMm: 364.28, knots: 31, strands: 93 }, band(2, 'tabby', 120, 83), band(3, 'soumak', 14, 0)],
+  cut: { spacerCard: { widthMm: 325, heightMm: 60 }, dowel: { lengthMm: 380, minDiameterMm: 6.2 }, cordMm: 716 },
+  massG: 109,
+  hours: { likely: 6.5, low: 3.9, high: 11.7 },
+  warnings: [],
+};
+
+export const INPUT: FigureInput = { piece: PIECE, plan: PLAN, units: 'cm' };
