@@ -70,15 +70,15 @@ const LONGEST_KEY = 40;
 const LONGEST_VALUE = 500;
 
 /** Keys and texts; a key with an empty text is left out, and empty metadata is none. */
-export const metadata = z.union([
-  z.literal('').transform((): Record<string, string> => ({})),
+export const metadata = z.preprocess(
+  (value) => (value === '' ? {} : value),
   z
     .record(z.string())
     .refine((all) => Object.keys(all).length <= MOST_KEYS, refusal(`You can have up to ${MOST_KEYS} metadata keys`, 'metadata_keys'))
     .refine((all) => Object.keys(all).every((key) => key.length <= LONGEST_KEY && !/[[\]]/.test(key)), refusal(`Metadata keys can be up to ${LONGEST_KEY} characters long`, 'metadata_key_length'))
     .refine((all) => Object.values(all).every((value) => value.length <= LONGEST_VALUE), refusal(`Metadata values must have up to ${LONGEST_VALUE} characters`, 'metadata_value_length'))
     .transform((all) => Object.fromEntries(Object.entries(all).filter(([, value]) => value !== ''))),
-]);
+);
 
 /** Members every request may have. */
 export const expandable = { expand: z.array(text(200)).max(20).optional() };
