@@ -4,7 +4,7 @@
  */
 import { open, rm } from 'node:fs/promises';
 import sharp from 'sharp';
-import type { MediaFiles } from '#contracts/media.ts';
+import type { MediaFile, MediaFiles } from '#contracts/media.ts';
 import { AppError } from '#server/errors.ts';
 import { readOnlyPhotos } from '#server/media/decoders.ts';
 import type { MediaStore } from '#server/media/store.ts';
@@ -52,7 +52,7 @@ export async function takePhoto(store: MediaStore, path: string, folder: string)
   if (kind === 'heic') throw new AppError('UNSUPPORTED', { says: 'This photo is in a form only some phones read. Send it as JPEG: in the camera settings choose the most compatible form, or take a picture of the picture.' });
   if (kind === null) throw new AppError('UNSUPPORTED', { says: NOT_A_PHOTO });
   const upright = await measure(path);
-  const files: Record<string, MediaFiles[string]> = {};
+  const files: Record<string, MediaFile> = {};
   let byteCount = 0;
   for (const [name, { side, quality }] of Object.entries(RENDITIONS)) {
     const temporary = await store.temporaryPath(`${folder.replaceAll('/', '-')}-${name}.webp`);
@@ -70,6 +70,7 @@ export async function takePhoto(store: MediaStore, path: string, folder: string)
       byteCount += size;
     } catch (error) {
       await rm(temporary, { force: true });
+      await Promise.all(Object.values(files).map(({ key }) => store.remove(key)));
       throw new AppError('UNSUPPORTED', { says: 'This photo is damaged: only a part of it can be read. Send it again, or take another.', cause: error });
     }
   }

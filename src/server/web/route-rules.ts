@@ -21,6 +21,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/500': 'public',
   '/_components': 'public',
   '/api/payments/events': 'machine',
+  '/api/photos': 'signed-in',
   '/api/ticks': 'signed-in',
   '/media/[id]/[file]': 'public',
   '/sign-in': 'public',

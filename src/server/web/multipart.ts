@@ -1,0 +1,81 @@
+/**
+ * A form with one file, read as a stream to disk: never into memory, never more than it may hold. Whatever was written
+ * goes when the work is done, whether it went well or not.
+ */
+import { randomUUID } from 'node:crypto';
+import { rm } from 'node:fs/promises';
+import { dirname } from 'node:path';
+import { Readable } from 'node:stream';
+import type { ReadableStream as NodeReadableStream } from 'node:stream/web';
+import multer, { MulterError } from 'multer';
+import { AppError } from '#server/errors.ts';
+import type { MediaStore } from '#server/media/store.ts';
+
+export interface ReceivedFile {
+  readonly path: string;
+  readonly originalName: string;
+  readonly byteCount: number;
+  /** As the sender says; a hint only. */
+  readonly contentType: string;
+}
+
+export interface ReceivedForm {
+  readonly fields: Readonly<Record<string, string>>;
+  readonly file: ReceivedFile | null;
+}
+
+export interface MultipartLimits {
+  /** Name of the file field. */
+  readonly field: string;
+  readonly maxBytes: number;
+  /** The sentence when the file is larger. */
+  readonly tooLargeSays: string;
+}
+
+const FIELDS = { fields: 20, fieldSize: 16 * 1_024, fieldNameSize: 100, headerPairs: 50 } as const;
+
+/**
+ * Hands the form to `work`, then removes the file.
+ * @throws TOO_LARGE, VALIDATION; what `work` throws.
+ */
+export async function withMultipart<T>(request: Request, store: MediaStore, limits: MultipartLimits, work: (form: ReceivedForm) => Promise<T>): Promise<T> {
+  const path = await store.temporaryPath(`upload-${randomUUID()}`);
+  try {
+    return await work(await receive(request, path, limits));
+  } finally {
+    await rm(path, { force: true });
+  }
+}
+
+/** What multer reads of a request: a stream with headers. */
+type MulterRequest = Parameters<ReturnType<ReturnType<typeof multer>['single']>>[0];
+
+async function receive(request: Request, path: string, limits: MultipartLimits): Promise<ReceivedForm> {
+  if (request.body === null || !(request.headers.get('content-type') ?? '').startsWith('multipart/form-data')) {
+    throw new AppError('VALIDATION', { says: 'No file came with this form. Choose one and send it again.' });
+  }
+  const upload = multer({
+    storage: multer.diskStorage({ destination: dirname(path), filename: (_request, _file, named) => { named(null, path.slice(dirname(path).length + 1)); } }),
+    limits: { fileSize: limits.maxBytes, files: 1, parts: FIELDS.fields + 1, ...FIELDS },
+    defParamCharset: 'utf8',
+  }).single(limits.field);
+  const source = Object.assign(Readable.fromWeb(request.body as NodeReadableStream), {
+    headers: Object.fromEntries(request.headers),
+    method: request.method,
+  }) as unknown as MulterRequest;
+  await new Promise<void>((resolve, reject) => {
+    source.once('error', reject);
+    upload(source, {} as Parameters<typeof upload>[1], (error?: unknown) => {
+      if (error === undefined || error === null) resolve();
+      else reject(error instanceof Error ? error : new Error(String(error)));
+    });
+  }).catch((error: unknown) => { throw asAppError(error, limits); });
+  const { body, file } = source;
+  const fields = Object.fromEntries(Object.entries((body ?? {}) as Record<string, unknown>).filter((entry): entry is [string, string] => typeof entry[1] === 'string'));
+  return { fields, file: file === undefined ? null : { path: file.path, originalName: file.originalname, byteCount: file.size, contentType: file.mimetype } };
+}
+
+function asAppError(error: unknown, limits: MultipartLimits): AppError {
+  if (error instanceof MulterError && error.code === 'LIMIT_FILE_SIZE') return new AppError('TOO_LARGE', { says: limits.tooLargeSays });
+  return new AppError('VALIDATION', { says: 'The file did not arrive whole. Send it again.', cause: error });
+}
