@@ -23,6 +23,8 @@ import { saidCookie } from '#server/web/said.ts';
 export const onRequest = defineMiddleware(async (context, next) => {
   if (context.isPrerendered) return next();
   const { request, locals } = context;
+  // The page that says why a request was refused passes here a second time; all there is to know is in `locals`.
+  if (locals.refusal !== undefined) return next();
   const requestId = randomUUID();
   const rule = ROUTE_RULES[context.routePattern];
   const isApi = context.routePattern.startsWith('/api/');

@@ -11,3 +11,9 @@ export function completePolicy(policy: string | null, payOrigin: string | null):
 export function cacheRule(signedIn: boolean): string {
   return signedIn ? 'private, no-store' : 'private, no-cache';
 }
+
+/** For a page whose address is a secret: it is told to nobody it links to, and kept by nobody. */
+export function keepTokenHere(headers: Headers): void {
+  headers.set('Referrer-Policy', 'no-referrer');
+  headers.set('Cache-Control', 'private, no-store');
+}
