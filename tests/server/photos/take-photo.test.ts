@@ -3,7 +3,7 @@ import { mkdtemp, readdir, readFile, rm, writeFile } from 'node:fs/promises';
 import { tmpdir } from 'node:os';
 import { join } from 'node:path';
 import { deflateSync } from 'node:zlib';
-import sharp from 'sharp';
+import sharp, { type Sharp } from 'sharp';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { takePhoto } from '#server/media/photo.ts';
 import { DiskMediaStore } from '#server/media/store.ts';
@@ -16,7 +16,7 @@ beforeEach(async () => {
 });
 afterEach(() => rm(folder, { recursive: true }));
 
-const picture = (width = 640, height = 480): sharp.Sharp => sharp({ create: { width, height, channels: 3, background: '#7a8f99' } });
+const picture = (width = 640, height = 480): Sharp => sharp({ create: { width, height, channels: 3, background: '#7a8f99' } });
 
 async function take(bytes: Buffer): Promise<Awaited<ReturnType<typeof takePhoto>>> {
   const path = join(folder, 'upload');
