@@ -15,7 +15,10 @@ export interface Received {
 
 /** A shop that listens for news, and says what it is told to. */
 export class Listener {
+  /** What was taken with a 200. */
   readonly received: Received[] = [];
+  /** What came, taken or not. */
+  readonly tried: Received[] = [];
   /** Status of the next answers; 200 when none waits. */
   readonly answers: number[] = [];
   readonly #server: Server;
@@ -34,7 +37,9 @@ export class Listener {
       request.on('end', () => {
         const status = listener.answers.shift() ?? 200;
         const body = Buffer.concat(chunks).toString('utf8');
-        if (status < 300) listener.received.push({ body, signature: String(request.headers['stripe-signature']), event: JSON.parse(body) as Stripe.Event });
+        const news = { body, signature: String(request.headers['stripe-signature']), event: JSON.parse(body) as Stripe.Event };
+        listener.tried.push(news);
+        if (status < 300) listener.received.push(news);
         response.writeHead(status).end();
         for (const wake of listener.#waiting.splice(0)) wake();
       });
