@@ -1,9 +1,11 @@
 /** From a described piece and its plan to what the drawing needs. */
-import type { Band, Piece, Yarn } from '../piece.ts';
-import type { BandPlan, Plan } from '../plan.ts';
-import type { ClothBand, ClothShape, WovenPiece } from './cloth-piece.ts';
-import { NEUTRAL, mix, shade, yarnColour } from './colour.ts';
-import { shapeSpans } from './shape-spans.ts';
+import type { ClothBand, EndSpan, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { NEUTRAL, mix, shade, yarnColour } from '#core/craft/cloth/colour.ts';
+import { ASHENHURST_K } from '#core/craft/defaults.ts';
+import type { Band, Piece, Shape, Yarn } from '#core/craft/piece.ts';
+import type { BandPlan, Plan } from '#core/craft/plan.ts';
+import { placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
+import { threadOf } from '#core/craft/yarn/thread.ts';
 
 /** Warp that names no colour: undyed cotton. */
 const BARE_WARP = '#d8d2c1';
@@ -52,11 +54,10 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: Piece, plan
   switch (band.technique) {
     case 'tabby': {
       const picks = planned.picks ?? Math.max(1, Math.round(planned.heightMm / plan.weft.pickSpacingMm));
-      const shapes = (band.shapes ?? []).map((shape): ClothShape => {
-        const grid = { spacingMm: plan.ends.spacingMm, pickSpacingMm: planned.heightMm / picks, ends: plan.ends.working, picks };
-        return { ...roleOf(shape.yarn, piece), spans: shapeSpans(shape, grid) };
-      });
-      return { ...base, technique: 'tabby', picks, cover: coverOf(piece.yarns[band.yarn], planned.heightMm / picks), shapes };
+      const pickSpacingMm = planned.heightMm / picks;
+      const grid = { spacingMm: plan.ends.spacingMm, pickSpacingMm, ends: plan.ends.working, rows: picks, widthMm: piece.size.widthMm };
+      const shapes = (band.shapes ?? []).map((shape) => ({ ...roleOf(shape.yarn, piece), spans: spansOf(shape, grid) }));
+      return { ...base, technique: 'tabby', picks, cover: coverOf(piece.yarns[band.yarn], pickSpacingMm), shapes };
     }
     case 'soumak':
       return {
@@ -100,12 +101,14 @@ function groundOf(index: number, piece: Piece): string {
   return own === undefined ? NEUTRAL : mix(roleOf(own.yarn, piece).colour, shade(NEUTRAL, 0.3), 0.25);
 }
 
-/**
- * How far the weft hides the warp: from the thickness of the yarn as it lies free, against the room of a row.
- * A yarn that was not measured counts as {@link UNKNOWN_COVER}.
- */
+/** How far the weft hides the warp: from the thickness of the yarn as it lies free, against the room of a row. */
 function coverOf(yarn: Yarn | undefined, pickSpacingMm: number): number {
-  if (yarn?.wrapsPerInch === undefined || pickSpacingMm <= 0) return UNKNOWN_COVER;
-  const diameterMm = (25.4 / yarn.wrapsPerInch) * Math.sqrt(yarn.strands ?? 1);
-  return Math.max(0, Math.min(1, (diameterMm / pickSpacingMm - 0.6) / 0.6));
+  if (yarn === undefined || !(pickSpacingMm > 0)) return UNKNOWN_COVER;
+  return Math.max(0, Math.min(1, (threadOf(yarn, ASHENHURST_K.weft).loftMm / pickSpacingMm - 0.6) / 0.6));
+}
+
+/** The ends a shape takes in each pick, as its yarn was counted. */
+function spansOf(shape: Shape, grid: BandGrid): EndSpan[] {
+  const { firstRow, spans } = placeShape(shape, grid);
+  return spans.map((span, index) => ({ row: firstRow + index, from: span.start, to: span.start + span.ends })).filter((span) => span.to > span.from);
 }

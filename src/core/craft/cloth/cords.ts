@@ -2,11 +2,10 @@
  * Square-knotted cords: every half knot is a bar that leans the other way from the one before, with a bump at the side it
  * came from; two still cords run down the middle, and the ends hang loose.
  */
-import { chanceFrom } from './chance.ts';
-import type { Cord, CordPiece } from './cloth-piece.ts';
-import { light, shade } from './colour.ts';
-import { ROUND, moved, num } from './markup.ts';
-import type { PathStore } from './markup.ts';
+import { chanceFrom } from '#core/craft/cloth/chance.ts';
+import type { Cord, CordPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { moved, num, ROUND, type PathStore } from '#core/craft/cloth/markup.ts';
 
 /** @param height pixels from the dowel to the ends of the loose cord */
 export function drawCords(piece: CordPiece, width: number, height: number, pxPerMm: number, paths: PathStore): string {

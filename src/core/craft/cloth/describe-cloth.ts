@@ -1,7 +1,6 @@
 /** The same cloth in words, for whoever does not see it. */
-import type { ClothBand, ClothPiece, TabbyBand, WovenPiece } from './cloth-piece.ts';
-import { wovenHeightMm } from './cloth-piece.ts';
-import type { ClothView } from './cloth-view.ts';
+import { wovenHeightMm, type ClothBand, type ClothPiece, type TabbyBand, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
 
 type Units = 'cm' | 'in';
 

@@ -4,24 +4,21 @@
  * Pure and repeatable: the same piece and view give the same cloth, on the server and in the browser. No `style`
  * attributes and no scripts; the markup holds nothing that a person typed but escaped words and checked colours.
  */
-import { coloursOf } from './bands/draw-band.ts';
-import { ryaFall } from './bands/rya.ts';
-import { chanceFrom } from './chance.ts';
-import type { ClothPiece, CordPiece, WovenPiece } from './cloth-piece.ts';
-import { wovenHeightMm } from './cloth-piece.ts';
-import { checkView, detailOf } from './cloth-view.ts';
-import type { ClothView } from './cloth-view.ts';
-import { drawCords } from './cords.ts';
-import { describeCloth } from './describe-cloth.ts';
-import { drawEnds } from './ends.ts';
-import { drawFellLine } from './fell-line.ts';
-import { drawCastShadow, drawDowel } from './hanging.ts';
-import { layBands } from './lay-bands.ts';
-import type { DrawnBands } from './lay-bands.ts';
-import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from './loom-frame.ts';
-import { PathStore, escapeWords, num } from './markup.ts';
-import { drawPlies } from './ply.ts';
-import type { Weave } from './weave.ts';
+import { coloursOf } from '#core/craft/cloth/bands/draw-band.ts';
+import { ryaFall } from '#core/craft/cloth/bands/rya.ts';
+import { chanceFrom } from '#core/craft/cloth/chance.ts';
+import { wovenHeightMm, type ClothPiece, type CordPiece, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { checkView, detailOf, type ClothView } from '#core/craft/cloth/cloth-view.ts';
+import { drawCords } from '#core/craft/cloth/cords.ts';
+import { describeCloth } from '#core/craft/cloth/describe-cloth.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { drawFellLine } from '#core/craft/cloth/fell-line.ts';
+import { drawCastShadow, drawDowel } from '#core/craft/cloth/hanging.ts';
+import { layBands, type DrawnBands } from '#core/craft/cloth/lay-bands.ts';
+import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from '#core/craft/cloth/loom-frame.ts';
+import { PathStore, escapeWords, num } from '#core/craft/cloth/markup.ts';
+import { drawPlies } from '#core/craft/cloth/ply.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 interface Picture {
   readonly width: number;

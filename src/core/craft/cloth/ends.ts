@@ -1,7 +1,7 @@
 /** The warp: all ends of a stretch are one line as thick as the stretch is high, dashed once for each end. */
-import { light, shade } from './colour.ts';
-import { dashes, num } from './markup.ts';
-import type { Weave } from './weave.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { dashes, num } from '#core/craft/cloth/markup.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /** Ends narrower than this cannot show that there are two of them. */
 const DOUBLED_FROM = 6;

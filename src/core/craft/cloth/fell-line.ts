@@ -2,7 +2,7 @@
  * The fell line: weld between two hairlines, so that it never depends on yellow alone. Its colours are classes
  * (`fell-line`, `fell-edge`) that follow the page's scheme; the attributes hold where no style sheet is.
  */
-import { num } from './markup.ts';
+import { num } from '#core/craft/cloth/markup.ts';
 
 export function drawFellLine(width: number, y: number, out: number, thick: number): string {
   return (

@@ -1,5 +1,5 @@
 /** What a piece hangs from, and the one flat shadow it casts. */
-import { box, num } from './markup.ts';
+import { box, num } from '#core/craft/cloth/markup.ts';
 
 /** Dowel and cord. `top` is where the cloth's warp begins below the dowel. */
 export function drawDowel(width: number, inset: number, top: number): string {

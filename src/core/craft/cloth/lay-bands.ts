@@ -1,10 +1,9 @@
 /** Where each band of a piece lies on the screen, how much of it is woven, and the cloth that makes. */
-import { drawBand } from './bands/draw-band.ts';
-import type { LaidBand } from './bands/draw-band.ts';
-import { drawHemStitch } from './bands/hem-stitch.ts';
-import type { HemStitchBand, WovenPiece } from './cloth-piece.ts';
-import { num } from './markup.ts';
-import type { Weave } from './weave.ts';
+import { drawBand, type LaidBand } from '#core/craft/cloth/bands/draw-band.ts';
+import { drawHemStitch } from '#core/craft/cloth/bands/hem-stitch.ts';
+import type { HemStitchBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 interface Laid {
   readonly band: LaidBand;

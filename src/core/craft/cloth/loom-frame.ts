@@ -1,8 +1,8 @@
 /** The frame a piece is woven in: four bars, nails with the warp round them, and the shuttle where the last row ended. */
-import { shade } from './colour.ts';
-import { drawEnds } from './ends.ts';
-import { ROUND, dashes, num } from './markup.ts';
-import type { Weave } from './weave.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { ROUND, dashes, num } from '#core/craft/cloth/markup.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 const WOOD = '#b9aa8d';
 const WOOD_DARK = '#6f6250';

@@ -2,8 +2,8 @@
  * The strip beside a list of parts: one stretch for each part, all of the same height, not to scale. A part that weaves
  * nothing (planning, dressing the loom, finishing) is a heading: spaced picks in warp yarn.
  */
-import type { ClothBand, EndSpan, WovenPiece } from './cloth-piece.ts';
-import { shade } from './colour.ts';
+import type { ClothBand, EndSpan, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
 
 /** Bands woven in one part, by name or by place in the piece; none for a part that weaves nothing. */
 export interface PartStretch {

@@ -4,9 +4,9 @@
  * Every thread is a line, "over" is a dash and "under" is a gap, so one pick is one dashed line however many ends it
  * crosses. The weft is drawn twice: once whole, to lie under the warp, and once as the beads that lie over it.
  */
-import { light, shade } from './colour.ts';
-import { ROUND, dashes, moved, num } from './markup.ts';
-import type { Weave } from './weave.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { ROUND, dashes, moved, num } from '#core/craft/cloth/markup.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /** One pick on the screen. `x0` is a multiple of two ends, so that dashes keep step with the warp. */
 export interface PickRow {

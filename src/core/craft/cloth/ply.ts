@@ -1,6 +1,6 @@
 /** The twist of a yarn, seen only near: a small pattern of slanted lines used as stroke paint. */
-import { light, shade } from './colour.ts';
-import { num } from './markup.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { num } from '#core/craft/cloth/markup.ts';
 
 /** One pattern for each colour, under the ids that `plyPaint` asks for. `pitch` is the thickness of a drawn row. */
 export function drawPlies(colours: readonly string[], pitch: number, id: string): string {

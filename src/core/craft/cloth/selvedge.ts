@@ -2,23 +2,60 @@
  * Weft turning round the last end: at the right after even rows, at the left after odd ones. It lies under the beads.
  * A row that does not reach the edge does not turn there.
  */
-import { shade } from './colour.ts';
-import { ROUND, num } from './markup.ts';
-import type { PickRow } from './picks.ts';
-import type { Weave } from './weave.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import { ROUND, dashes, num } from '#core/craft/cloth/markup.ts';
+import type { PickRow } from '#core/craft/cloth/picks.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
+
+/** Turns finer than this are drawn as one dashed line for each edge, coarser ones as arcs. */
+const ARCS_FROM = 5;
 
 export function drawSelvedge(rows: readonly PickRow[], pitch: number, colour: string, weave: Weave): string {
   const out = Math.min(pitch * 0.5, weave.end * 0.42);
+  return pitch < ARCS_FROM ? fineTurns(rows, pitch, out, colour, weave) : arcs(rows, pitch, out, colour, weave);
+}
+
+const touchesLeft = (row: PickRow): boolean => row.x0 === 0;
+const touchesRight = (row: PickRow, weave: Weave): boolean => weave.width - row.x1 < 0.5;
+
+/** A turn joins `row` and the next one at the right if the row is even, at the left if it is odd. */
+function turnsAt(row: PickRow, next: PickRow | undefined, pitch: number, weave: Weave): 'left' | 'right' | undefined {
+  if (next === undefined || next.y - row.y > pitch * 1.5) return undefined;
+  if (row.odd) return touchesLeft(row) && touchesLeft(next) ? 'left' : undefined;
+  return touchesRight(row, weave) && touchesRight(next, weave) ? 'right' : undefined;
+}
+
+function arcs(rows: readonly PickRow[], pitch: number, out: number, colour: string, weave: Weave): string {
   let d = '';
   rows.forEach((row, index) => {
     const next = rows[index + 1];
-    if (next === undefined) return;
+    const side = turnsAt(row, next, pitch, weave);
+    if (next === undefined || side === undefined) return;
     const rise = next.y - row.y;
-    if (rise > pitch * 1.5) return;
-    if (row.odd && row.x0 === 0 && next.x0 === 0) d += `M1 ${num(row.y)}h-1a${num(out)} ${num(rise / 2)} 0 0 0 0 ${num(rise)}h1`;
-    const atRight = weave.width - row.x1 < 0.5 && weave.width - next.x1 < 0.5;
-    if (!row.odd && atRight) d += `M${num(weave.width - 1)} ${num(row.y)}h1a${num(out)} ${num(rise / 2)} 0 0 1 0 ${num(rise)}h-1`;
+    if (side === 'left') d += `M1 ${num(row.y)}h-1a${num(out)} ${num(rise / 2)} 0 0 0 0 ${num(rise)}h1`;
+    else d += `M${num(weave.width - 1)} ${num(row.y)}h1a${num(out)} ${num(rise / 2)} 0 0 1 0 ${num(rise)}h-1`;
   });
-  const drawn = weave.paths.stroke(d, shade(colour, 0.45), pitch * 0.8, ROUND);
-  return pitch > 3.4 ? drawn + weave.paths.stroke(d, shade(colour, 0.06), pitch * 0.54, ROUND) : drawn;
+  return weave.paths.stroke(d, shade(colour, 0.45), pitch * 0.8, ROUND) + weave.paths.stroke(d, shade(colour, 0.06), pitch * 0.54, ROUND);
+}
+
+interface Edge {
+  readonly x: number;
+  readonly first: number;
+  last: number;
+}
+
+function fineTurns(rows: readonly PickRow[], pitch: number, out: number, colour: string, weave: Weave): string {
+  const edges: Edge[] = [];
+  rows.forEach((row, index) => {
+    const side = turnsAt(row, rows[index + 1], pitch, weave);
+    if (side === undefined) return;
+    const x = side === 'left' ? -out * 0.4 : weave.width + out * 0.4;
+    const before = edges.findLast((edge) => edge.x === x);
+    if (before !== undefined && row.y - before.last < pitch * 2.5) before.last = row.y;
+    else edges.push({ x, first: row.y, last: row.y });
+  });
+  const turn = ROUND + dashes(pitch * 0.3, pitch * 1.7, 0);
+  const d = edges.map((edge) => `M${num(edge.x)} ${num(edge.first + pitch * 0.35)}V${num(edge.last + pitch * 0.7)}`).join('');
+  const drawn = weave.paths.stroke(d, shade(colour, 0.45), pitch * 0.8, turn);
+  return pitch > 3.4 ? drawn + weave.paths.stroke(d, shade(colour, 0.06), pitch * 0.54, turn) : drawn;
 }

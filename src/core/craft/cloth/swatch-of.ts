@@ -1,6 +1,6 @@
 /** Small patches of cloth: one band of a piece, or one yarn, as it looks woven. Not to scale. */
-import type { ClothBand, TabbyBand, WovenPiece } from './cloth-piece.ts';
-import { yarnColour } from './colour.ts';
+import type { ClothBand, TabbyBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { yarnColour } from '#core/craft/cloth/colour.ts';
 
 const PATCH_MM = 100;
 const PATCH_ENDS = 10;

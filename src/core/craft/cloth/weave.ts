@@ -1,5 +1,5 @@
 /** What every band needs to know of the drawing it stands in. */
-import type { PathStore } from './markup.ts';
+import type { PathStore } from '#core/craft/cloth/markup.ts';
 
 export interface Weave {
   readonly id: string;

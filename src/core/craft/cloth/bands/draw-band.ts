@@ -1,13 +1,13 @@
 /** One band of any technique, drawn with its upper edge at y = 0. */
-import type { ClothBand, HemStitchBand } from '../cloth-piece.ts';
-import type { Weave } from '../weave.ts';
-import { drawHeading } from './heading.ts';
-import { drawLoopPile } from './loop-pile.ts';
-import { drawRoving } from './roving.ts';
-import { drawRya } from './rya.ts';
-import { drawSoumak } from './soumak.ts';
-import { drawTabby } from './tabby.ts';
-import { drawTwining } from './twining.ts';
+import { drawHeading } from '#core/craft/cloth/bands/heading.ts';
+import { drawLoopPile } from '#core/craft/cloth/bands/loop-pile.ts';
+import { drawRoving } from '#core/craft/cloth/bands/roving.ts';
+import { drawRya } from '#core/craft/cloth/bands/rya.ts';
+import { drawSoumak } from '#core/craft/cloth/bands/soumak.ts';
+import { drawTabby } from '#core/craft/cloth/bands/tabby.ts';
+import { drawTwining } from '#core/craft/cloth/bands/twining.ts';
+import type { ClothBand, HemStitchBand } from '#core/craft/cloth/cloth-piece.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /** Hem-stitch is not here: it has no height of its own and is laid on the edge of the cloth afterwards. */
 export type LaidBand = Exclude<ClothBand, HemStitchBand>;

@@ -1,8 +1,8 @@
 /** Heading: a few spaced picks in warp yarn. Stands for parts of the work that are not yet cloth. */
-import type { HeadingBand } from '../cloth-piece.ts';
-import { drawEnds } from '../ends.ts';
-import { drawPicks, rowsOver } from '../picks.ts';
-import type { Weave } from '../weave.ts';
+import type { HeadingBand } from '#core/craft/cloth/cloth-piece.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { drawPicks, rowsOver } from '#core/craft/cloth/picks.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawHeading(band: HeadingBand, height: number, weave: Weave): string {
   const count = Math.max(1, Math.floor(height / (weave.minPick * 2.2)));

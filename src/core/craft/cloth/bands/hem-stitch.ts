@@ -1,8 +1,8 @@
 /** Hem-stitch: on the edge of the cloth, one stitch round each bundle of ends and one that reaches into the rows. */
-import type { HemStitchBand } from '../cloth-piece.ts';
-import { light, shade } from '../colour.ts';
-import { ROUND, moved, num } from '../markup.ts';
-import type { Weave } from '../weave.ts';
+import type { HemStitchBand } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { ROUND, moved, num } from '#core/craft/cloth/markup.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /**
  * Drawn about the edge of the cloth at y = 0.

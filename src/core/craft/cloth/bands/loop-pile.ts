@@ -1,10 +1,9 @@
 /** Loop pile: on tabby, rows of loops that hang a little over the row below. Lower rows come first. */
-import type { LoopPileBand } from '../cloth-piece.ts';
-import { light, shade } from '../colour.ts';
-import { ROUND, moved, num } from '../markup.ts';
-import { drawnRows } from '../weave.ts';
-import type { Weave } from '../weave.ts';
-import { drawGround } from './tabby.ts';
+import { drawGround } from '#core/craft/cloth/bands/tabby.ts';
+import type { LoopPileBand } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { ROUND, moved, num } from '#core/craft/cloth/markup.ts';
+import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 const GROUND_COVER = 0.7;
 

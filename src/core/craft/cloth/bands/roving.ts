@@ -1,10 +1,10 @@
 /** Roving: a very thick weft that goes over and under several ends at a time. */
-import type { RovingBand } from '../cloth-piece.ts';
-import { shade } from '../colour.ts';
-import { drawEnds } from '../ends.ts';
-import { box } from '../markup.ts';
-import { drawPicks, rowsOver } from '../picks.ts';
-import type { Weave } from '../weave.ts';
+import type { RovingBand } from '#core/craft/cloth/cloth-piece.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { box } from '#core/craft/cloth/markup.ts';
+import { drawPicks, rowsOver } from '#core/craft/cloth/picks.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 const ROVING_COVER = 0.85;
 

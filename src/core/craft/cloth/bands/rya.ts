@@ -4,12 +4,11 @@
  * Pile is most of what one sees, so each strand is drawn. Two rows of pile are made by chance and used in turn: the eye
  * does not find the repeat and the markup stays small.
  */
-import type { RyaBand } from '../cloth-piece.ts';
-import { light, shade } from '../colour.ts';
-import { ROUND, moved, num } from '../markup.ts';
-import { drawnRows } from '../weave.ts';
-import type { Weave } from '../weave.ts';
-import { drawGround } from './tabby.ts';
+import { drawGround } from '#core/craft/cloth/bands/tabby.ts';
+import type { RyaBand } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { ROUND, moved, num } from '#core/craft/cloth/markup.ts';
+import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 /** Tabby that shows between knots is packed this close. */
 const GROUND_COVER = 0.7;

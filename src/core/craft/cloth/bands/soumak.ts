@@ -2,12 +2,12 @@
  * Soumak: a stitch goes over some ends and back under fewer, so it lies slanted. Rows lean in turn; two that follow each
  * other without tabby between them make a chain.
  */
-import type { SoumakBand } from '../cloth-piece.ts';
-import { light, shade } from '../colour.ts';
-import { drawEnds } from '../ends.ts';
-import { ROUND, box, moved, num } from '../markup.ts';
-import { drawPicks, plyPaint, rowsOver } from '../picks.ts';
-import type { Weave } from '../weave.ts';
+import type { SoumakBand } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
+import { drawPicks, plyPaint, rowsOver } from '#core/craft/cloth/picks.ts';
+import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /** Rows thinner than this, in pixels, are gathered: there must be room for shadow, body and light. */
 const THINNEST_ROW = 4.4;

@@ -1,13 +1,11 @@
 /** A band of tabby, and the shapes (wedges, slopes, circles) woven into it. */
-import type { ClothShape, TabbyBand } from '../cloth-piece.ts';
-import { shade } from '../colour.ts';
-import { drawEnds } from '../ends.ts';
-import { box, dashes, num } from '../markup.ts';
-import { drawPicks, rowsOver } from '../picks.ts';
-import type { PickRow } from '../picks.ts';
-import { drawSelvedge } from '../selvedge.ts';
-import { drawnRows } from '../weave.ts';
-import type { Weave } from '../weave.ts';
+import type { ClothShape, TabbyBand } from '#core/craft/cloth/cloth-piece.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { box, dashes, num } from '#core/craft/cloth/markup.ts';
+import { drawPicks, rowsOver, type PickRow } from '#core/craft/cloth/picks.ts';
+import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
+import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTabby(band: TabbyBand, height: number, weave: Weave): string {
   const count = drawnRows(band.picks, height, weave.minPick);
@@ -32,7 +30,7 @@ export function drawGround(colour: string, count: number, height: number, cover:
 }
 
 /** A band's slopes climb in about this many steps: hands step a wedge every few rows, and the eye reads the stair. */
-const STEPS = 14;
+const STEPS = 20;
 
 /** The shape's rows on the screen: spans snapped to two drawn ends, rows gathered into steps. */
 function shapeRows(shape: ClothShape, band: TabbyBand, count: number, pitch: number, weave: Weave): PickRow[] {

@@ -1,10 +1,9 @@
 /** Twining: two strands that cross between the ends, so every end carries one slanted stroke. */
-import type { TwiningBand } from '../cloth-piece.ts';
-import { light, shade } from '../colour.ts';
-import { drawEnds } from '../ends.ts';
-import { ROUND, box, moved, num } from '../markup.ts';
-import { drawnRows } from '../weave.ts';
-import type { Weave } from '../weave.ts';
+import type { TwiningBand } from '#core/craft/cloth/cloth-piece.ts';
+import { light, shade } from '#core/craft/cloth/colour.ts';
+import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
+import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTwining(band: TwiningBand, height: number, weave: Weave): string {
   const count = band.rows === 1 ? 1 : drawnRows(band.rows, height, weave.minPick * 1.3);
