@@ -6,8 +6,7 @@
 // allowed into a tree of our own (read-block.ts, read-inline.ts), name headings and settle links within the lesson.
 import type { Root } from 'mdast';
 import { characterKind, characterName } from './characters.ts';
-import type { FigureKind } from './components.ts';
-import { FIGURE_KINDS } from './components.ts';
+import { contentsOf, type LessonContents } from './contents.ts';
 import { LIMITS } from './limits.ts';
 import { plainWords } from './plain-text.ts';
 import { preScan } from './pre-scan.ts';
@@ -17,19 +16,12 @@ import { readInline } from './read-inline.ts';
 import { readMarkdown } from './read-markdown.ts';
 import { slugOf, uniqueSlug } from './slugs.ts';
 import { surveyTree, type Definitions } from './survey.ts';
-import { headingAnchor, stepAnchor, TREE_VERSION, type Block, type LessonTree, type MediaEntry, type OutlineEntry, type StepEntry } from './tree.ts';
+import { headingAnchor, stepAnchor, TREE_VERSION, type Block, type LessonTree, type OutlineEntry } from './tree.ts';
 import type { Walk } from './walk.ts';
 
-export interface LessonText {
+export interface LessonText extends LessonContents {
   ok: true;
   tree: LessonTree;
-  /** The headings, in order. */
-  outline: OutlineEntry[];
-  steps: StepEntry[];
-  /** Keys of the plan's amounts that the text shows. */
-  amounts: string[];
-  figures: FigureKind[];
-  media: MediaEntry[];
   problems: [];
   /** Things that do not keep the lesson from being read but that its writer should look at. */
   warnings: LessonProblem[];
@@ -53,23 +45,14 @@ export function parseLessonText(source: string): LessonText | RefusedText {
   const tree: LessonTree = { v: TREE_VERSION, type: 'root', children: [] };
   const walk = walkTree(read.root, text, survey.definitions, tree);
   if (walk.problems.length > 0) return { ok: false, problems: inOrder(walk.problems) };
-  const outline = nameHeadings(tree.children);
-  const warnings = [...settleInsideLinks(walk, outline), ...unseenCharacters(text)].slice(0, LIMITS.problems);
-  return {
-    ok: true,
-    tree,
-    outline,
-    steps: stepsOf(tree.children),
-    amounts: [...walk.amounts],
-    figures: FIGURE_KINDS.filter((kind) => walk.figures.has(kind)),
-    media: [...walk.media],
-    problems: [],
-    warnings: inOrder(warnings),
-  };
+  nameHeadings(tree.children);
+  const contents = contentsOf(tree);
+  const warnings = [...settleInsideLinks(walk, contents.outline), ...unseenCharacters(text)].slice(0, LIMITS.problems);
+  return { ok: true, tree, ...contents, problems: [], warnings: inOrder(warnings) };
 }
 
 function walkTree(root: Root, source: string, definitions: Definitions, tree: LessonTree): Walk {
-  const walk: Walk = { source, definitions, frames: [], amounts: new Set(), figures: new Set(), media: [], stepIds: new Set(), insideLinks: [], problems: [] };
+  const walk: Walk = { source, definitions, frames: [], stepIds: new Set(), insideLinks: [], problems: [] };
   walk.frames.push({ kind: 'blocks', nodes: root.children, index: 0, out: tree.children, place: { top: true } });
   for (let frame = walk.frames.at(-1); frame !== undefined; frame = walk.frames.at(-1)) {
     const node = frame.nodes[frame.index];
@@ -81,16 +64,10 @@ function walkTree(root: Root, source: string, definitions: Definitions, tree: Le
   return walk;
 }
 
-function nameHeadings(blocks: readonly Block[]): OutlineEntry[] {
+/** Headings stand at the left edge only, so they are all among the tree's own children. */
+function nameHeadings(blocks: readonly Block[]): void {
   const taken = new Set<string>();
-  const outline: OutlineEntry[] = [];
-  for (const block of blocks) {
-    if (block.type !== 'heading') continue;
-    const words = plainWords(block.children);
-    block.id = uniqueSlug(words, taken);
-    outline.push({ depth: block.depth, id: block.id, words });
-  }
-  return outline;
+  for (const block of blocks) if (block.type === 'heading') block.id = uniqueSlug(plainWords(block.children), taken);
 }
 
 /** Points `#tie-on` at the heading or step of that name; warns where there is none. */
@@ -106,14 +83,6 @@ function settleInsideLinks(walk: Walk, outline: readonly OutlineEntry[]): Lesson
     }
   }
   return warnings;
-}
-
-function stepsOf(blocks: readonly Block[]): StepEntry[] {
-  const steps: StepEntry[] = [];
-  for (const block of blocks) {
-    if (block.type === 'component' && block.name === 'Step') steps.push({ id: block.props['id'] ?? '', words: plainWords(block.children) });
-  }
-  return steps;
 }
 
 /** Characters without width are needed in some scripts, so they are allowed, and shown to the writer. */

@@ -6,8 +6,8 @@ import { LIMITS } from './limits.ts';
 import type { Place, Tag } from './read-component.ts';
 import { componentNamed } from './components.ts';
 import { BRACES } from './read-inline.ts';
-import type { Block, Component, Inline, List, Table } from './tree.ts';
-import { keepWords, noteNeeds, readBlocksLater, readInlineLater, refuse, takeComponent, type Walk } from './walk.ts';
+import type { Block, Inline, List, Table } from './tree.ts';
+import { keepWords, readBlocksLater, readInlineLater, refuse, takeComponent, type Walk } from './walk.ts';
 
 /** Copies one node that stands on lines of its own to `out`, or refuses it. */
 export function readBlock(walk: Walk, node: Nodes, out: Block[], place: Place): void {
@@ -176,7 +176,5 @@ function readPicture(walk: Walk, node: Image, out: Block[]): void {
     refuse(walk, node.position, 'picture', `What a picture shows is said in at most ${String(LIMITS.titleLength)} characters.`);
     return;
   }
-  const picture: Component = { type: 'component', name: 'Picture', props: { name: node.url, alt, ...(caption === '' ? {} : { caption }) }, children: [] };
-  noteNeeds(walk, picture, node.position);
-  out.push(picture);
+  out.push({ type: 'component', name: 'Picture', props: { name: node.url, alt, ...(caption === '' ? {} : { caption }) }, children: [] });
 }

@@ -6,7 +6,7 @@ import { problemAt, type LessonProblem, type LessonProblemCode } from './problem
 import type { Place, Tag } from './read-component.ts';
 import { readComponent } from './read-component.ts';
 import type { Definitions } from './survey.ts';
-import type { Block, Component, Inline, Link, MediaEntry } from './tree.ts';
+import type { Block, Component, Inline, Link } from './tree.ts';
 
 export type Position = Nodes['position'];
 
@@ -20,9 +20,6 @@ export interface Walk {
   readonly definitions: Definitions;
   /** The innermost run last. A list of our own instead of recursion: depth costs no stack. */
   readonly frames: Frame[];
-  readonly amounts: Set<string>;
-  readonly figures: Set<string>;
-  readonly media: MediaEntry[];
   readonly stepIds: Set<string>;
   /** Links to a place in the same lesson; their targets are known only when all headings are. */
   readonly insideLinks: { link: Link; position: Position }[];
@@ -48,10 +45,7 @@ export function keepWords(walk: Walk, value: string, position: Position): string
   return value.normalize('NFC');
 }
 
-/**
- * The component of a tag that may stand at `place`, with nothing in it yet, or undefined when it was refused. Notes
- * what the lesson needs from outside.
- */
+/** The component of a tag that may stand at `place`, with nothing in it yet, or undefined when it was refused. */
 export function takeComponent(walk: Walk, tag: Tag, place: Place): { component: Component; stands: 'block' | 'inline' } | undefined {
   const read = readComponent(tag, place);
   if (!read.ok) {
@@ -59,23 +53,13 @@ export function takeComponent(walk: Walk, tag: Tag, place: Place): { component: 
     return undefined;
   }
   const component: Component = { type: 'component', name: read.name, props: read.props, children: [] };
-  noteNeeds(walk, component, tag.position);
+  if (read.name === 'Step') noteStep(walk, read.props['id'] ?? '', tag.position);
   return { component, stands: read.schema.stands };
 }
 
-/** Remembers which amounts, figures, media and step names the lesson uses. */
-export function noteNeeds(walk: Walk, component: Component, position: Position): void {
-  const { name, props } = component;
-  if (name === 'Amount') walk.amounts.add(props['of'] ?? '');
-  else if (name === 'Figure') walk.figures.add(props['of'] ?? '');
-  else if (name === 'Picture' || name === 'Video') {
-    const kind = name === 'Picture' ? 'picture' : 'video';
-    const media = props['name'] ?? '';
-    if (!walk.media.some((entry) => entry.kind === kind && entry.name === media)) walk.media.push({ kind, name: media });
-  } else if (name === 'Step') {
-    const id = props['id'] ?? '';
-    if (walk.stepIds.has(id)) refuse(walk, position, 'step', `Two steps are called "${id}". Give each its own name, so that a tick belongs to one step.`);
-    walk.stepIds.add(id);
-    if (walk.stepIds.size > LIMITS.steps) refuse(walk, position, 'too-much', `The lesson has more than ${String(LIMITS.steps)} steps. Divide it into two parts.`);
-  }
+/** Each step has a name of its own, for a tick belongs to one step. */
+function noteStep(walk: Walk, id: string, position: Position): void {
+  if (walk.stepIds.has(id)) refuse(walk, position, 'step', `Two steps are called "${id}". Give each its own name, so that a tick belongs to one step.`);
+  walk.stepIds.add(id);
+  if (walk.stepIds.size > LIMITS.steps) refuse(walk, position, 'too-much', `The lesson has more than ${String(LIMITS.steps)} steps. Divide it into two parts.`);
 }
