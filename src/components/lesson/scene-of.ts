@@ -1,0 +1,99 @@
+// Puts a scene together from what a page has fetched: a piece with its plan, the media of the series, the ticks.
+import type { MediaDetail, MediaFiles } from '#contracts/media.ts';
+import { amountOf } from '#core/craft/amounts.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import type { Plan } from '#core/craft/plan.ts';
+import type { FigureKind } from '#core/lesson-text/components.ts';
+import type { LessonContents } from '#core/lesson-text/contents.ts';
+import { formatAmount } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+import type { LessonScene, SceneAmount, SceneFigure, ScenePicture, SceneVideo, StepForm } from './scene.ts';
+
+/** A picture or video of a series that is ready to be shown. */
+export interface SeriesMediaFile {
+  readonly kind: 'picture' | 'video';
+  /** Its name in the series. */
+  readonly name: string;
+  readonly title: string;
+  readonly publicId: string;
+  readonly files: MediaFiles;
+  readonly detail: MediaDetail;
+}
+
+export interface SceneSources {
+  readonly contents: LessonContents;
+  /** The person's piece, or the pattern piece; absent while a series has none. */
+  readonly piece?: { readonly piece: Piece; readonly plan: Plan };
+  readonly units: Units;
+  readonly media: readonly SeriesMediaFile[];
+  readonly ticked: Iterable<string>;
+  readonly stepForm?: StepForm;
+  /** The drawing of a technique with this piece, as SVG; undefined when it cannot be drawn. */
+  readonly drawFigure: (kind: FigureKind) => string | undefined;
+}
+
+/** The scene of one lesson. What a source does not have is left out of it, and the components say so in its place. */
+export function sceneOf(sources: SceneSources): LessonScene {
+  const { contents, ticked, stepForm } = sources;
+  return {
+    amounts: amountsOf(sources),
+    figures: entries<SceneFigure, FigureKind>(contents.figures, (kind) => {
+      const svg = sources.drawFigure(kind);
+      return svg === undefined ? undefined : { svg };
+    }),
+    pictures: entries(namesOf(contents, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
+    videos: entries(namesOf(contents, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
+    ticked: new Set(ticked),
+    ...(stepForm === undefined ? {} : { stepForm }),
+  };
+}
+
+function amountsOf({ contents, piece: of, units }: SceneSources): Record<string, SceneAmount> {
+  if (of === undefined) return {};
+  return entries(contents.amounts, (key) => {
+    const amount = amountOf(key, of.piece, of.plan);
+    if (!amount.ok) return undefined;
+    return { label: amount.value.label, parts: formatAmount(amount.value, units), how: amount.value.howReckoned };
+  });
+}
+
+function entries<T, K extends string>(names: readonly K[], find: (name: K) => T | undefined): Record<string, T> {
+  return Object.fromEntries(
+    names.flatMap((name): [string, T][] => {
+      const found = find(name);
+      return found === undefined ? [] : [[name, found]];
+    }),
+  );
+}
+
+function namesOf(contents: LessonContents, kind: 'picture' | 'video'): string[] {
+  return contents.media.filter((entry) => entry.kind === kind).map(({ name }) => name);
+}
+
+function mediaNamed({ media }: SceneSources, kind: 'picture' | 'video', name: string): SeriesMediaFile | undefined {
+  return media.find((one) => one.kind === kind && one.name === name);
+}
+
+function pictureOf(media: SeriesMediaFile | undefined): ScenePicture | undefined {
+  const large = media?.files['large'];
+  if (media === undefined || large?.width === undefined || large.height === undefined) return undefined;
+  return { src: addressOf(media, 'large'), width: large.width, height: large.height };
+}
+
+function videoOf(media: SeriesMediaFile | undefined): SceneVideo | undefined {
+  const video = media?.files['video'];
+  if (media === undefined || video === undefined) return undefined;
+  return {
+    title: media.title,
+    src: addressOf(media, 'video'),
+    type: video.contentType,
+    ...(media.files['poster'] === undefined ? {} : { poster: addressOf(media, 'poster') }),
+    ...(media.files['captions'] === undefined ? {} : { captions: addressOf(media, 'captions') }),
+    chapters: media.detail.chapters ?? [],
+    cues: media.detail.cues ?? [],
+  };
+}
+
+function addressOf(media: SeriesMediaFile, file: string): string {
+  return `/media/${media.publicId}/${file}`;
+}

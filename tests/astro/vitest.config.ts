@@ -1,0 +1,7 @@
+// Components drawn as the site draws them. Apart from the other kinds, because Astro's whole build has to come up first.
+import { getViteConfig } from 'astro/config';
+
+const root = new URL('../..', import.meta.url).pathname;
+const test = { name: 'astro', root, include: ['tests/astro/**/*.test.ts'], environment: 'node', env: { TZ: 'America/New_York' } };
+
+export default getViteConfig({ test } as Parameters<typeof getViteConfig>[0]);
