@@ -15,6 +15,7 @@ const CRAFT_NAMES = ['frame-loom'] as const satisfies readonly (keyof typeof CRA
 /** Reckons the piece in these fields; undefined, with a problem among their findings, if it cannot be woven. */
 export function planInFields(fields: Fields): Plan | undefined {
   const { findings } = fields;
+  if (findings.count > 0) return undefined;
   const craft = findings.soundly(() => fields.choice('craft', 'Craft', CRAFT_NAMES));
   const reckoned = craft && CRAFTS[craft](fields);
   return reckoned && { ...reckoned, warnings: findings.warnings };
@@ -26,6 +27,6 @@ export function planInFields(fields: Fields): Plan | undefined {
  * `units` are those in which messages name lengths.
  */
 export function planPiece(piece: unknown, units: Units = 'cm'): Outcome<Plan> {
-  const findings = new Findings(units);
+  const findings = Findings.in(units);
   return findings.outcome(planInFields(Fields.of(piece, '', 'A piece', findings)));
 }

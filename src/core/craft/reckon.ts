@@ -34,7 +34,7 @@ const RECKONERS: { readonly [Q in Question]: (fields: Fields) => Answers[Q] | un
   shape: reckonShape,
   'length-text': reckonLengthText,
   piece: (fields) => {
-    const plan = planInFields(fields.group('piece', 'Piece'));
+    const plan = planInFields(Fields.of(fields.take('piece'), '', 'The piece', fields.findings.within('/piece')));
     fields.end();
     return plan;
   },
@@ -44,8 +44,8 @@ const QUESTIONS = ['yarn', 'take-up', 'soumak', 'rya', 'shape', 'length-text', '
 
 /** Answers one question. Never throws for what a person may send. */
 export function reckon(input: unknown, units: Units = 'cm'): Outcome<Answers[Question]> {
-  const findings = new Findings(units);
+  const findings = Findings.in(units);
   const fields = Fields.of(input, '', 'A question', findings);
-  const what = findings.soundly(() => fields.choice('what', 'What to reckon', QUESTIONS));
-  return findings.outcome(what === undefined ? undefined : RECKONERS[what](fields));
+  const what = fields.choice('what', 'What to reckon', QUESTIONS);
+  return findings.outcome(findings.count > 0 ? undefined : RECKONERS[what](fields));
 }

@@ -15,7 +15,7 @@ export interface RateRule {
 
 /** Written numbers for everything that is limited: one table, so that they can be judged together. */
 export const RATE_RULES = {
-  reckon: { name: 'reckon', limit: 120, windowSeconds: 60 },
+  reckon: { name: 'reckon', limit: 600, windowSeconds: 60 },
   /** Failed sign-ins from one network, at whatever account. */
   signInByNetwork: { name: 'sign-in-network', limit: 30, windowSeconds: 3_600 },
   /** Failed sign-ins at one account from one network or known browser; beyond it each try must wait, up to 30 s. */

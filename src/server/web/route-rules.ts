@@ -5,7 +5,7 @@
 export type RouteRule =
   /** Everybody. What is shown is decided by policies. */
   | 'public'
-  /** Machines with a signature or a token of their own: no session, no origin check. */
+  /** Machines: with a signature or a token of their own, or asking only what everybody may know. No session, no origin check. */
   | 'machine'
   | 'signed-in'
   /** The owner of a workroom. */
@@ -22,6 +22,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/_components': 'public',
   '/api/payments/events': 'machine',
   '/api/photos': 'signed-in',
+  '/api/reckon': 'machine',
   '/api/ticks': 'signed-in',
   '/media/[id]/[file]': 'public',
   '/sign-in': 'public',

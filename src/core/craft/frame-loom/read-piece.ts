@@ -131,7 +131,7 @@ function readHanging(fields: Fields): { readonly dowel?: Dowel } {
 }
 
 function readYarns(fields: Fields): ReadonlyMap<string, Yarn | undefined> {
-  const group = fields.group('yarns', 'Yarns');
+  const group = fields.group('yarns', 'The group of yarns');
   const entries = group.entries();
   if (entries.length > MOST_YARNS) {
     fields.reject('E_RANGE', 'yarns', `${String(entries.length)} yarns are too many. Up to ${String(MOST_YARNS)} work.`);

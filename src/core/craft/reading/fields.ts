@@ -6,7 +6,7 @@
  * Readers always answer a value of the right type; where the input was wrong it is only
  * a stand-in, and `Findings.soundly` tells the two apart.
  */
-import { below, type Findings } from '#core/craft/reading/findings.ts';
+import { below, type ErrorCode, type Findings } from '#core/craft/reading/findings.ts';
 
 /** What a number may be, and what it is called in messages. */
 export interface NumberRule {
@@ -96,8 +96,14 @@ export class Fields {
     return below(this.path, key);
   }
 
-  reject(code: Parameters<Findings['reject']>[0], key: string, message: string): void {
-    this.findings.reject(code, this.pathOf(key), message);
+  /** Refuses the value of a key, unless the whole object was refused already. */
+  reject(code: ErrorCode, key: string, message: string): void {
+    if (!this.#refused) this.findings.reject(code, this.pathOf(key), message);
+  }
+
+  /** Refuses the object itself. */
+  rejectWhole(code: ErrorCode, message: string): void {
+    if (!this.#refused) this.findings.reject(code, this.path, message);
   }
 
   number(key: string, rule: NumberRule): number {
@@ -114,10 +120,8 @@ export class Fields {
     const value = this.take(key);
     const found = options.find((option) => option === value);
     if (found !== undefined) return found;
-    if (!this.#refused) {
-      const what = value === undefined ? `${name} is missing.` : `${name} is not one we know.`;
-      this.reject('E_ENUM', key, `${what} One of these works: ${options.join(', ')}.`);
-    }
+    const what = value === undefined ? `${name} is missing.` : `${name} is not one we know.`;
+    this.reject('E_ENUM', key, `${what} One of these works: ${options.join(', ')}.`);
     return options[0];
   }
 
@@ -132,14 +136,14 @@ export class Fields {
   flag(key: string, name: string): boolean {
     const value = this.take(key);
     if (typeof value === 'boolean') return value;
-    if (!this.#refused) this.reject('E_ENUM', key, `${name} is either true or false.`);
+    this.reject('E_ENUM', key, `${name} is either true or false.`);
     return false;
   }
 
   text(key: string, { name, maxLength }: TextRule): string {
     const value = this.take(key);
     if (typeof value !== 'string' || value === '') {
-      if (!this.#refused) this.reject('E_ENUM', key, `${name} is missing. Give it as text.`);
+      this.reject('E_ENUM', key, `${name} is missing. Give it as text.`);
       return '';
     }
     if (value.length > maxLength) this.reject('E_RANGE', key, `${name} may be ${String(maxLength)} characters long at most.`);
@@ -164,7 +168,7 @@ export class Fields {
   list(key: string, name: string, max: number): readonly unknown[] {
     const value = this.take(key);
     if (!Array.isArray(value) || value.length === 0) {
-      if (!this.#refused) this.reject('E_ENUM', key, `${name}: at least one is needed, as a list.`);
+      this.reject('E_ENUM', key, `${name}: at least one is needed, as a list.`);
       return [];
     }
     if (value.length > max) {

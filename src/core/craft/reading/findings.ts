@@ -38,19 +38,39 @@ export type WarningCode =
   | 'W_DOWEL';
 
 export class Findings {
-  readonly #problems = new Map<string, Problem>();
-  readonly #warnings: Problem[] = [];
+  readonly #problems: Map<string, Problem>;
+  readonly #warnings: Problem[];
+  readonly #prefix: string;
 
-  /** `units` are those in which messages name lengths. */
-  constructor(readonly units: Units = 'cm') {}
+  private constructor(
+    /** Those in which messages name lengths. */
+    readonly units: Units,
+    problems: Map<string, Problem>,
+    warnings: Problem[],
+    prefix: string,
+  ) {
+    this.#problems = problems;
+    this.#warnings = warnings;
+    this.#prefix = prefix;
+  }
+
+  static in(units: Units): Findings {
+    return new Findings(units, new Map(), [], '');
+  }
+
+  /** The same findings, for a part that lies at `path` and knows nothing of what lies round it. */
+  within(path: string): Findings {
+    return new Findings(this.units, this.#problems, this.#warnings, `${this.#prefix}${path}`);
+  }
 
   /** One problem for each place: the first one found there stands. */
   reject(code: ErrorCode, path: string, message: string): void {
-    if (!this.#problems.has(path)) this.#problems.set(path, { code, path, message });
+    const full = `${this.#prefix}${path}`;
+    if (!this.#problems.has(full)) this.#problems.set(full, { code, path: full, message });
   }
 
   warn(code: WarningCode, path: string, message: string): void {
-    this.#warnings.push({ code, path, message });
+    this.#warnings.push({ code, path: `${this.#prefix}${path}`, message });
   }
 
   get count(): number {

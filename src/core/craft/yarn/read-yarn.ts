@@ -81,7 +81,7 @@ function readGrist(fields: Fields): YarnGrist {
     case 'count':
       return { count: readCountGroup(fields) };
     default:
-      fields.findings.reject('E_NUM', fields.path, 'How thick is the yarn? Give its tex, its metres in 100 g, or a count.');
+      fields.rejectWhole('E_NUM', 'How thick is the yarn? Give its tex, its metres in 100 g, or a count.');
       return { tex: 1 };
   }
 }
