@@ -57,6 +57,7 @@ describe.each(pages)('$id', (page) => {
     const kinds = valuesOf(page, 'Figure', 'of');
     if (page.data.topic !== 'yarn') expect(kinds.length).toBeGreaterThanOrEqual(1);
     for (const kind of kinds) expect(FIGURE_KINDS).toContain(kind);
+    expect(new Set(kinds).size).toBe(kinds.length);
     for (const caption of valuesOf(page, 'Figure', 'caption')) expect(caption.length).toBeGreaterThan(15);
     expect(valuesOf(page, 'Figure', 'caption')).toHaveLength(kinds.length);
   });
