@@ -2,6 +2,7 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parse } from 'yaml';
+import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { neighboursOf, pagesByTopic } from '#components/handbook/reading-order.ts';
 import { isTableName } from '#components/handbook/tables.ts';
 import { HANDBOOK_TOPICS, HandbookHead } from '#contracts/handbook.ts';
@@ -66,6 +67,11 @@ describe.each(pages)('$id', (page) => {
     for (const name of valuesOf(page, 'Reckoned', 'of')) expect(isTableName(name), name).toBe(true);
     const examples = valuesOf(page, 'InLowTide', 'of');
     expect(new Set(examples).size).toBe(examples.length);
+  });
+
+  test('shows the cloth of a band the pattern has, if any', () => {
+    const { swatch } = page.data;
+    if (swatch !== undefined) expect(LOW_TIDE.piece.bands.map((band) => band.name)).toContain(swatch);
   });
 
   test('uses no component and no tag but the five it may', () => {
