@@ -64,7 +64,9 @@ function commandOf(name, reloading = false) {
 /** Runs a process that ends by itself. @param {string} name @param {string} what @param {NodeJS.ProcessEnv} env */
 async function runOnce(name, what, env) {
   const done = await runToEnd(commandOf(name), { cwd: root, env });
-  if (!done.ok) throw new Refusal(`${what} did not work. Its last lines:\n${tail(done.output)}`);
+  if (done.ok) return;
+  const setting = /^SettingsError: (.+)$/m.exec(done.output)?.[1];
+  throw new Refusal(setting ?? `${what} did not work. Its last lines:\n${tail(done.output)}`);
 }
 
 async function start() {

@@ -22,8 +22,6 @@ export const HandbookHead = z
     topic: z.string().refine((topic): topic is HandbookTopic => keys.some((key) => key === topic), 'No topic of the handbook.'),
     /** Place among the pages of its topic. */
     order: z.number().int().min(1),
-    /** Name of a band of Low Tide that shows what the page is about. */
-    swatch: z.string().optional(),
     /** What its numbers rest on, in words. */
     sources: z.array(z.string().min(10)).default([]),
   })

@@ -2,7 +2,6 @@
  * What can go wrong, in about a dozen words. Every layer throws AppError; each edge (endpoint, action, page)
  * has one mapping of these words to what its caller sees.
  */
-import type { Actor } from '#server/context.ts';
 
 export const ERROR_CODES = {
   VALIDATION: { status: 422, says: 'Something in this form does not work yet.' },
@@ -60,7 +59,7 @@ export function fieldError(field: string, says: string): AppError {
 }
 
 /** The person who asks, or UNAUTHENTICATED. */
-export function signedIn(ctx: { readonly actor: Actor | null }): Actor {
+export function signedIn<A>(ctx: { readonly actor: A | null }): A {
   if (ctx.actor === null) throw new AppError('UNAUTHENTICATED');
   return ctx.actor;
 }

@@ -16,8 +16,6 @@ export type RouteRule =
 
 export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/': 'public',
-  '/handbook': 'public',
-  '/handbook/[...slug]': 'public',
   '/refused': 'public',
   '/404': 'public',
   '/500': 'public',

@@ -20,7 +20,7 @@ export function canonicalTarget(target: string): string | undefined {
   const cut = target.indexOf('?');
   const path = cut === -1 ? target : target.slice(0, cut);
   const query = cut === -1 ? '' : target.slice(cut);
-  if (BROKEN_ESCAPE.test(path) || /%00/.test(path)) return undefined;
+  if (BROKEN_ESCAPE.test(path) || path.includes('%00')) return undefined;
   const plain = path
     .replace(UNRESERVED, (escape, hex: string) => {
       const character = String.fromCharCode(Number.parseInt(hex, 16));

@@ -11,15 +11,13 @@ type HeaderArgument = OutgoingHttpHeaders | OutgoingHttpHeader[];
 /** Takes the body in place of the client. */
 export interface BodySink {
   /** False when the writer should wait for `drain`. */
-  write(chunk: Uint8Array): boolean;
-  end(): void;
+  readonly write: (chunk: Uint8Array) => boolean;
+  readonly end: () => void;
 }
 
 /** The response's own methods, behind the gate. */
-export interface RawResponse {
-  writeHead(status: number): void;
-  write(chunk: Uint8Array): boolean;
-  end(): void;
+export interface RawResponse extends BodySink {
+  readonly writeHead: (status: number) => void;
 }
 
 /**
@@ -50,10 +48,11 @@ export function gateOf(response: ServerResponse): ResponseGate {
 }
 
 function putUpGate(response: ServerResponse): ResponseGate {
+  // eslint-disable-next-line @typescript-eslint/unbound-method -- always applied to the response
   const own = { writeHead: response.writeHead, write: response.write, end: response.end, flushHeaders: response.flushHeaders };
   const raw: RawResponse = {
     writeHead: (status) => { Reflect.apply(own.writeHead, response, [status]); },
-    write: (chunk) => Reflect.apply(own.write, response, [chunk]),
+    write: (chunk) => Boolean(Reflect.apply(own.write, response, [chunk])),
     end: () => { Reflect.apply(own.end, response, []); },
   };
   const watchers: HeadWatcher[] = [];
@@ -157,7 +156,7 @@ function bytesOf(chunk: unknown, encoding: unknown): Uint8Array {
 
 function callbackAmong(...values: readonly unknown[]): (() => void) | undefined {
   for (const value of values) {
-    if (typeof value === 'function') return () => { value(); };
+    if (typeof value === 'function') return () => { Reflect.apply(value, undefined, []); };
   }
   return undefined;
 }
