@@ -1,0 +1,63 @@
+import type { LessonSettingsInput } from '#contracts/workroom.ts';
+import type { Checkpoint } from '#contracts/lesson.ts';
+import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
+import type { Context } from '#server/context.ts';
+import { fieldError, found } from '#server/errors.ts';
+import { Lesson, Workroom } from '#server/models/index.ts';
+import { ownLesson, withSeriesLocked } from './own-series.ts';
+
+/** Keeps a part's title, length, timetable and checkpoint. */
+export async function saveLessonSettings(ctx: Context, input: LessonSettingsInput): Promise<void> {
+  const { lesson: known, series } = await ownLesson(ctx, input.lesson);
+  const workroom = found(await Workroom.findByPk(series.workroomId));
+  await withSeriesLocked(series, async () => {
+    const lesson = found(await Lesson.findByPk(known.id));
+    const opens = await openingOf(ctx, input, lesson, workroom.timeZone);
+    await lesson.update({
+      title: input.title,
+      minutes: input.minutes,
+      isPreview: input.isPreview,
+      opens,
+      opensAt: opens.rule === 'on-date' ? instantOfWall(opens.wall, opens.zone) : null,
+      checkpoint: checkpointOf(input),
+    });
+  });
+}
+
+function checkpointOf({ asksForPhoto, ask, look }: LessonSettingsInput): Checkpoint | null {
+  if (!asksForPhoto) return null;
+  if (ask === '') throw fieldError('ask', 'Say what the photo shall show, for instance: Show your warped loom.');
+  return { ask, look };
+}
+
+async function openingOf(ctx: Context, input: LessonSettingsInput, lesson: Lesson, zone: string): Promise<OpeningRule> {
+  switch (input.rule) {
+    case 'at-once':
+      return { rule: 'at-once' };
+    case 'after-seat':
+      return { rule: 'after-seat', days: daysOf(input.days) };
+    case 'on-date':
+      return onDate(ctx, input.wall ?? '', zone, lesson);
+    case 'after-verdict': {
+      const earlier = await Lesson.findOne({ where: { publicId: input.after ?? '', seriesId: lesson.seriesId, takenOutAt: null } });
+      if (earlier?.checkpoint == null) throw fieldError('after', 'Choose an earlier part that asks for a photo.');
+      if (earlier.position >= lesson.position) throw fieldError('after', 'That part comes later, so this one could never open. Choose an earlier one.');
+      return { rule: 'after-verdict', lesson: earlier.publicId };
+    }
+  }
+}
+
+function daysOf(typed: string | undefined): number {
+  const days = Number(typed);
+  if (typed === undefined || typed.trim() === '' || !Number.isInteger(days) || days < 0 || days > 365) throw fieldError('days', 'Between 0 and 365 days works.');
+  return days;
+}
+
+function onDate(ctx: Context, wall: string, zone: string, lesson: Lesson): OpeningRule {
+  const opensAt = instantOfWall(wall, zone);
+  if (opensAt === null) throw fieldError('wall', 'The day and time are missing. Write them like 2027-03-01 09:00.');
+  // A date that has passed is fine as long as it was there before: the part is open, and its teacher changes the title.
+  const unchanged = lesson.opens.rule === 'on-date' && lesson.opens.wall === wall;
+  if (opensAt <= ctx.clock.now() && !unchanged) throw fieldError('wall', 'This moment has passed. Choose a later one, or let the part open at once.');
+  return { rule: 'on-date', wall, zone };
+}
