@@ -3,9 +3,8 @@ import { join } from 'node:path';
 import { config } from '#server/config.ts';
 import { startStandIns, type StandIns } from '#stand-ins/stand-ins.ts';
 
-const { port, dataFolder, publicUrl, smtpUrl, payments } = config();
-
 try {
+  const { port, dataFolder, publicUrl, smtpUrl, payments } = config();
   const running = await startStandIns({
     httpPort: port + 1,
     smtpPort: Number(new URL(smtpUrl).port),
