@@ -1,10 +1,7 @@
 /** Forms of having an account. The sentences are what a person reads at the field. */
 import { z } from 'astro/zod';
+import { filled } from '#contracts/fields.ts';
 import { parseMailAddress } from '#core/mail-address.ts';
-
-/** A text field that must be filled. A field that comes twice, or not at all, is missing. */
-const filled = (missing: string, longest: number) =>
-  z.string({ required_error: missing, invalid_type_error: missing }).trim().min(1, missing).max(longest, `At most ${longest} characters work here.`);
 
 const MISSING_ADDRESS = 'The mail address is missing. Write it like name@saltmarsh.example.';
 
@@ -23,7 +20,6 @@ const name = filled('Your name is missing. It stands beside your photos and ques
   .refine((text) => !/\p{C}/u.test(text), 'There is a sign in it that cannot be shown. Type it again.');
 
 const token = z.string().max(100).catch('');
-const publicId = z.string().max(26).catch('');
 
 /** Where to go afterwards; judged again where it is used. */
 const to = z.string().max(2_000).optional().catch(undefined);
@@ -74,23 +70,3 @@ export function isTimeZone(zone: string): boolean {
     return false;
   }
 }
-
-export const LetInForm = z.object({
-  person: publicId,
-  workroom: filled('The name of the workroom is missing.', 120),
-  handle: filled('The handle is missing. It is the end of the address of her page.', 40)
-    .refine((text) => /^[a-z0-9]+(?:-[a-z0-9]+)*$/.test(text), 'Small letters, figures and single hyphens work, such as saltmarsh-loom-room.'),
-});
-export type LetInInput = z.output<typeof LetInForm>;
-
-export const SuspendForm = z.object({
-  person: publicId,
-  reason: filled('The reason is missing. It is kept in the log of the office.', 200),
-});
-export type SuspendInput = z.output<typeof SuspendForm>;
-
-export const RestoreForm = z.object({ person: publicId });
-
-const rowId = z.coerce.number().int().positive().max(4_294_967_295).catch(0);
-export const SendAgainForm = z.object({ mail: rowId });
-export const TryAgainForm = z.object({ job: rowId });

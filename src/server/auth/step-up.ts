@@ -10,12 +10,17 @@ export const PROOF_MINUTES = 10;
 /** How old when a form that needs it is shown: so that there is time to fill it in, and nothing typed is lost. */
 export const PROOF_MINUTES_FOR_FORM = 5;
 
+/** Whether the password was typed in the session of `actor` within `maxAgeMinutes`. */
+export function isProved(actor: Actor, now: Date, maxAgeMinutes: number): boolean {
+  return now.getTime() - actor.provedAt.getTime() <= maxAgeMinutes * 60_000;
+}
+
 /**
  * The person who asks, if she typed her password in this session within `maxAgeMinutes`.
  * @throws UNAUTHENTICATED for a visitor; PROOF_NEEDED, which sends her to /prove and back.
  */
 export function requireProof(ctx: Context, maxAgeMinutes: number = PROOF_MINUTES): Actor {
   if (ctx.actor === null) throw new AppError('UNAUTHENTICATED');
-  if (ctx.clock.now().getTime() - ctx.actor.provedAt.getTime() > maxAgeMinutes * 60_000) throw new AppError('PROOF_NEEDED');
+  if (!isProved(ctx.actor, ctx.clock.now(), maxAgeMinutes)) throw new AppError('PROOF_NEEDED');
   return ctx.actor;
 }

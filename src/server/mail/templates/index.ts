@@ -2,6 +2,7 @@
 import type { z } from 'astro/zod';
 import { verdict } from './bench.ts';
 import { seatBought } from './checkout.ts';
+import { workroomOpened } from './office.ts';
 import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
 
 export const TEMPLATES = {
@@ -11,6 +12,7 @@ export const TEMPLATES = {
   'password-changed': passwordChanged,
   'seat-bought': seatBought,
   verdict,
+  'workroom-opened': workroomOpened,
 } as const;
 
 export type TemplateName = keyof typeof TEMPLATES;
