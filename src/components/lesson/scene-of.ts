@@ -1,9 +1,9 @@
 // Puts a scene together from what a page has fetched: a piece with its plan, the media of the series, the ticks.
 import type { MediaDetail, MediaFiles } from '#contracts/media.ts';
 import { amountOf } from '#core/craft/amounts.ts';
+import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan.ts';
-import type { FigureKind } from '#core/lesson-text/components.ts';
+import type { Plan } from '#core/craft/plan-types.ts';
 import type { LessonContents } from '#core/lesson-text/contents.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -28,8 +28,6 @@ export interface SceneSources {
   readonly media: readonly SeriesMediaFile[];
   readonly ticked: Iterable<string>;
   readonly stepForm?: StepForm;
-  /** The drawing of a technique with this piece, as SVG; undefined when it cannot be drawn. */
-  readonly drawFigure: (kind: FigureKind) => string | undefined;
 }
 
 /** The scene of one lesson. What a source does not have is left out of it, and the components say so in its place. */
@@ -37,10 +35,7 @@ export function sceneOf(sources: SceneSources): LessonScene {
   const { contents, ticked, stepForm } = sources;
   return {
     amounts: amountsOf(sources),
-    figures: entries<SceneFigure, FigureKind>(contents.figures, (kind) => {
-      const svg = sources.drawFigure(kind);
-      return svg === undefined ? undefined : { svg };
-    }),
+    figures: figuresOf(sources),
     pictures: entries(namesOf(contents, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
     videos: entries(namesOf(contents, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
     ticked: new Set(ticked),
@@ -53,8 +48,15 @@ function amountsOf({ contents, piece: of, units }: SceneSources): Record<string,
   return entries(contents.amounts, (key) => {
     const amount = amountOf(key, of.piece, of.plan);
     if (!amount.ok) return undefined;
-    return { label: amount.value.label, parts: formatAmount(amount.value, units), how: amount.value.howReckoned };
+    const { label, howReckoned } = amount.value;
+    const inputs = howReckoned.inputs.map(({ name, value }) => ({ name, parts: formatAmount(value, units) }));
+    return { label, parts: formatAmount(amount.value, units), how: { ...howReckoned, inputs } };
   });
+}
+
+function figuresOf({ contents, piece: of, units }: SceneSources): Record<string, SceneFigure> {
+  if (of === undefined) return {};
+  return entries(contents.figures, (kind) => ({ svg: drawFigure(kind, { ...of, units }) }));
 }
 
 function entries<T, K extends string>(names: readonly K[], find: (name: K) => T | undefined): Record<string, T> {

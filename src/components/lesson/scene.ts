@@ -1,14 +1,20 @@
 // Everything a lesson's text needs to be drawn besides its words: amounts in a person's own units, figures drawn with
 // her piece, addresses of media, what she has ticked. The page gathers it; drawing itself asks nobody.
 import type { Chapter, Cue } from '#contracts/media.ts';
-import type { HowReckoned } from '#core/craft/amounts.ts';
+import type { Trust } from '#core/craft/amounts.ts';
 import type { AmountPart } from '#core/units/format-amount.ts';
 
 export interface SceneAmount {
   /** What it is, in words: `Warp ends`. */
   readonly label: string;
   readonly parts: readonly AmountPart[];
-  readonly how: HowReckoned;
+  /** How it was reckoned: in words and signs, what went into it, by whose rule, and how sure that is. */
+  readonly how: {
+    readonly formula: string;
+    readonly inputs: readonly { readonly name: string; readonly parts: readonly AmountPart[] }[];
+    readonly source: string;
+    readonly trust: Trust;
+  };
 }
 
 export interface SceneFigure {

@@ -1,6 +1,8 @@
 // The parts of our own that a lesson's text may use, as data: where each may stand, what it may hold and which
 // attributes it takes. The reader, the check of stored trees and the writer's help all follow this one table.
 
+import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
+
 /** How one attribute's value is judged. All values are text in quotes; there are no numbers, switches or code. */
 export type AttributeSchema =
   | { kind: 'name'; required: boolean; says: string }
@@ -25,31 +27,6 @@ export interface ComponentSchema {
 export const COMPONENT_NAMES = ['Step', 'Caution', 'Tip', 'Amount', 'Figure', 'Picture', 'Video'] as const;
 
 export type ComponentName = (typeof COMPONENT_NAMES)[number];
-
-/** The steps of a technique that can be drawn. */
-export const FIGURE_KINDS = [
-  'warping',
-  'doubled-ends',
-  'spacer-card',
-  'tabby',
-  'selvedge',
-  'hem-stitch',
-  'rya-knot',
-  'wedge',
-  'slit',
-  'soumak',
-  'roving',
-  'shed-stick',
-  'butterfly',
-  'cutting-off',
-  'overhand-knot',
-  'hanging',
-  'weave-in',
-  'measure-wraps',
-  'card-width',
-] as const;
-
-export type FigureKind = (typeof FIGURE_KINDS)[number];
 
 const caption = { kind: 'words', required: false, maximum: 200, says: 'the line under it' } as const;
 

@@ -1,6 +1,6 @@
 // What a lesson's tree holds and needs: its headings and steps, and what has to be fetched or reckoned before it can
 // be drawn.
-import { FIGURE_KINDS, type FigureKind } from './components.ts';
+import { FIGURE_KINDS, type FigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { plainWords } from './plain-text.ts';
 import type { Component, LessonNode, LessonTree, MediaEntry, OutlineEntry, StepEntry } from './tree.ts';
 

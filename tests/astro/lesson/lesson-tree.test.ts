@@ -8,7 +8,7 @@ import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 const warp: SceneAmount = {
   label: 'Warp',
   parts: [{ kind: 'number', text: '19' }, { kind: 'text', text: '\u2009' }, { kind: 'fraction', text: '11/16' }, { kind: 'text', text: '\u00a0' }, { kind: 'unit', text: 'yd' }],
-  how: { formula: 'ends × loom height', inputs: [{ name: 'Ends', value: '66' }], source: 'Counted from your plan.', trust: 'formula' },
+  how: { formula: 'ends × loom height', inputs: [{ name: 'Ends', parts: [{ kind: 'number', text: '66' }] }], source: 'Counted from your plan.', trust: 'formula' },
 };
 const bare: LessonScene = { amounts: {}, figures: {}, pictures: {}, videos: {}, ticked: new Set() };
 
@@ -125,7 +125,7 @@ describe('parts', () => {
 
   test('what is not there yet is told in its place', async () => {
     const page = await draw('![A loom](loom)\n\n<Video name="v"/>\n\n<Figure of="tabby"/>');
-    expect([...page.querySelectorAll('.not-there')].map(textOf)).toEqual(['A picture belongs here, and is not there yet. A loom', 'A video belongs here. It is being made ready.']);
+    expect([...page.querySelectorAll('.not-there')].map(textOf)).toEqual(['A picture belongs here, and is not there yet. A loom', 'A video belongs here. It is being made ready.', 'A figure belongs here. It is drawn from the piece, and this series has none yet.']);
   });
 
   test('a video plays with captions, and its chapters and words are there without script', async () => {

@@ -5,7 +5,7 @@ import { parse } from 'yaml';
 import { neighboursOf, pagesByTopic } from '#components/handbook/reading-order.ts';
 import { isTableName } from '#components/handbook/tables.ts';
 import { HANDBOOK_TOPICS, HandbookHead } from '#contracts/handbook.ts';
-import { FIGURE_KINDS } from '#core/lesson-text/components.ts';
+import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
 
 const folder = new URL('../../../content/handbook/', import.meta.url);
 const slugs = readdirSync(folder).filter((file) => file.endsWith('.mdx')).map((file) => file.slice(0, -'.mdx'.length));

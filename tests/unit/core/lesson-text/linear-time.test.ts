@@ -8,7 +8,7 @@ import { checkLinkAddress } from '#core/lesson-text/link-address.ts';
 import { plainWords } from '#core/lesson-text/plain-text.ts';
 import { preScan } from '#core/lesson-text/pre-scan.ts';
 import { slugOf } from '#core/lesson-text/slugs.ts';
-import { bestOf } from './best-of.ts';
+import { leastTime } from './least-time.ts';
 
 const WORST = ['a', 'a-', 'a.', '-', '.', ' ', '\t', '\n', '[', '<', '`', '- ', '1.', '/', ':', '@', 'a@', '%', '\u200b', '\u0301', '\ud83e', '[]:', "'"];
 const long = (unit: string): string => unit.repeat(Math.ceil(100_000 / unit.length));
@@ -29,6 +29,6 @@ const READERS: Record<string, (text: string) => unknown> = {
 
 describe.each(Object.entries(READERS))('%s', (_name, read) => {
   test.each(WORST.map((unit) => [JSON.stringify(unit), long(unit)]))('is through with %s in less than 50 ms', (_unit, text) => {
-    expect(bestOf(3, () => read(text))).toBeLessThan(50);
+    expect(leastTime(() => read(text), 50)).toBeLessThan(50);
   });
 });

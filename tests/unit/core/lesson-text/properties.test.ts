@@ -18,7 +18,7 @@ const PIECES = [
 const spliced = fc.array(fc.constantFrom(...PIECES), { maxLength: 40 }).map((pieces) => pieces.join(''));
 const anyText = fc.oneof(spliced, fc.string({ unit: 'binary', maxLength: 200 }));
 
-describe('whatever is typed', () => {
+describe('whatever is typed', { timeout: 60_000 }, () => {
   test('is either refused with a reason and a place in the text, or becomes a tree that is valid', () => {
     fc.assert(
       fc.property(anyText, (source) => {
@@ -27,7 +27,7 @@ describe('whatever is typed', () => {
         const lines = source.replace(/\r\n?/g, '\n').split('\n').length;
         return result.problems.length > 0 && result.problems.every((problem) => problem.line >= 1 && problem.line <= lines && problem.column >= 1 && problem.reason.endsWith('.'));
       }),
-      { numRuns: 3_000 },
+      { numRuns: 800 },
     );
   });
 
@@ -39,7 +39,7 @@ describe('whatever is typed', () => {
         const json = JSON.stringify(result.tree);
         return !/"url":"(?!https:\/\/|\/(?!\/)|#|mailto:)/.test(json) && !/"type":"(?:html|mdx)/.test(json) && !/"name":"(?:script|constructor|a:b)/.test(json);
       }),
-      { numRuns: 3_000 },
+      { numRuns: 800 },
     );
   });
 
@@ -60,7 +60,7 @@ describe('whatever is typed', () => {
         const bare = (text: string): string => text.normalize('NFC').replace(/\s+/g, '');
         return bare(words.join('')) === bare(plainWords(result.tree.children, () => ''));
       }),
-      { numRuns: 2_000 },
+      { numRuns: 600 },
     );
   });
 });
