@@ -39,6 +39,8 @@ legend { font: 500 1.375rem/1.2 Lora, Georgia, serif; padding: 0; margin-bottom:
 .notice { background: var(--sheet); border-top: 4px solid var(--mend); padding: 16px; margin: 24px 0 0; }
 .notice h2 { color: var(--mend); margin-bottom: 4px; }
 .notice p { margin: 0; }
+.notice ul { margin: 0; padding-left: 20px; }
+.notice a { color: inherit; }
 .narrow { display: grid; grid-template-columns: 1fr 1fr; gap: 16px; max-width: 26em; }
 .after { margin-top: 12px; }
 .acts { display: flex; flex-wrap: wrap; gap: 12px; margin-top: 24px; }

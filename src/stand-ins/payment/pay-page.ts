@@ -40,11 +40,14 @@ ${!free && cardList()}
 }
 
 function troubles({ wrong, refused }: PayPageView): Html | false {
-  const fields = Object.keys(wrong).length;
+  const sentences = Object.entries(wrong);
   if (refused !== undefined) {
     return html`<div class="notice" role="alert"><h2>The bank said no</h2><p>${refused} Nothing was taken. Try another card.</p></div>`;
   }
-  return fields > 0 && html`<div class="notice" role="alert"><h2>Not paid yet</h2><p>${fields === 1 ? 'One field needs' : `${fields} fields need`} another look.</p></div>`;
+  return (
+    sentences.length > 0 &&
+    html`<div class="notice" role="alert"><h2>Not paid yet</h2><ul>${sentences.map(([name, sentence]) => html`<li><a href="#${name}">${sentence}</a></li>`)}</ul></div>`
+  );
 }
 
 function cardFields(view: PayPageView, total: string): Html {
@@ -93,7 +96,7 @@ function field(view: PayPageView, name: TypedField, label: string, look: { hint:
   return html`<div class="field${wrong !== undefined && ' bad'}"><label for="${name}">${label}</label><span class="hint" id="${name}-hint">${look.hint}</span>
 <input id="${name}" name="${name}" value="${view.typed[name]}" inputmode="${look.inputmode}" autocomplete="off" aria-describedby="${name}-hint${wrong !== undefined && ` ${name}-wrong`}"${
     wrong !== undefined && html` aria-invalid="true"`
-  }>${wrongOf(view, name)}</div>`;
+  }${Object.keys(view.wrong)[0] === name && html` autofocus`}>${wrongOf(view, name)}</div>`;
 }
 
 function wrongOf(view: PayPageView, name: TypedField): Html | false {

@@ -110,7 +110,9 @@ describe('the pay page', () => {
     for (const sentence of ['This is not a mail address.', 'its last digit does not fit', 'Type month and year like 12/34.', 'Type three digits']) expect(text).toContain(sentence);
     expect(text).toContain('aria-invalid="true"');
     expect(text).toContain('value="4242 4242 4242 4241"');
-    expect(text).toContain('4 fields need another look');
+    expect(text).toContain('<a href="#expiry">Type month and year like 12/34.</a>');
+    expect(text.match(/autofocus/g)).toHaveLength(1);
+    expect(text).toMatch(/<input id="email"[^>]* autofocus>/);
   });
 
   test.each([
