@@ -5,7 +5,7 @@ import { closeSync, existsSync, openSync, renameSync } from 'node:fs';
 import { lastLines } from './say.mjs';
 
 const STOP_SECONDS = 40;
-const KEPT_OUTPUT = 20_000;
+const KEPT_OUTPUT = 200_000;
 const SETPRIV = '/usr/bin/setpriv';
 
 /**

@@ -1,0 +1,34 @@
+/**
+ * Journeys through the built site in Debian's Chromium. Without FELLMARK_TEST_URL the site is started, with a demo
+ * world of its own in a folder that goes away with it.
+ */
+import { defineConfig } from 'playwright/test';
+
+const report = process.env['FELLMARK_TEST_REPORT'];
+/** Known in the workers, which read this file again after the site was started. */
+const address = process.env['FELLMARK_TEST_URL'];
+
+export default defineConfig({
+  testDir: '.',
+  testMatch: '**/*.e2e.ts',
+  outputDir: '../../test-results/browser',
+  globalSetup: './support/start-site.ts',
+  // One site serves all; a test that changes what others see makes people of its own.
+  workers: 2,
+  fullyParallel: true,
+  forbidOnly: true,
+  retries: 0,
+  timeout: 60_000,
+  reporter: [['list'], ...(report === undefined ? [] : [['json', { outputFile: report }] as const])],
+  use: {
+    browserName: 'chromium',
+    ...(address === undefined ? {} : { baseURL: address }),
+    trace: 'retain-on-failure',
+    viewport: { width: 1280, height: 900 },
+    locale: 'en-GB',
+    launchOptions: {
+      executablePath: process.env['FELLMARK_TEST_CHROMIUM'] ?? '/usr/bin/chromium',
+      args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--disable-background-networking', '--disable-component-update', '--disable-sync'],
+    },
+  },
+});
