@@ -86,7 +86,7 @@ export function readCard(typed: Typed, now: Date): CardReading {
   if (typed.expiry === '') wrong.expiry = 'The expiry is missing. Any month to come works, 12/34 for instance.';
   else if (!expiry || expMonth < 1 || expMonth > 12) wrong.expiry = 'Type month and year like 12/34.';
   else if (expYear * 12 + expMonth < now.getUTCFullYear() * 12 + now.getUTCMonth() + 1) wrong.expiry = 'This month is over. Any month to come works.';
-  if (!/^\d+$/.test(typed.cvc) || typed.cvc.length !== cvcLength(number)) wrong.cvc = `Type ${cvcLength(number) === 4 ? 'four' : 'three'} digits; any will do.`;
+  if (!/^\d+$/.test(typed.cvc) || typed.cvc.length !== cvcLength(number)) wrong.cvc = `The security code has ${cvcLength(number) === 4 ? 'four' : 'three'} digits; any will do.`;
   return Object.keys(wrong).length > 0 ? { ok: false, wrong } : { ok: true, number, expMonth, expYear };
 }
 

@@ -107,7 +107,7 @@ describe('the pay page', () => {
   test('says for each field what is wrong, and keeps what was typed', async () => {
     const { url } = await open();
     const { text } = await buyerDoes(url, { ...CARD, email: 'amara', number: '4242 4242 4242 4241', expiry: '13/34', cvc: '12' });
-    for (const sentence of ['This is not a mail address.', 'its last digit does not fit', 'Type month and year like 12/34.', 'Type three digits']) expect(text).toContain(sentence);
+    for (const sentence of ['This is not a mail address.', 'its last digit does not fit', 'Type month and year like 12/34.', 'The security code has three digits']) expect(text).toContain(sentence);
     expect(text).toContain('aria-invalid="true"');
     expect(text).toContain('value="4242 4242 4242 4241"');
     expect(text).toContain('<a href="#expiry">Type month and year like 12/34.</a>');
