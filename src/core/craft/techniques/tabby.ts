@@ -12,7 +12,7 @@ import {
   longestSlitRows,
   placeShape,
   type BandGrid,
-  type YarnArea,
+  type PlacedShape,
 } from '#core/craft/techniques/colour-rows.ts';
 import { LONGEST_MM, readName, readRole } from '#core/craft/techniques/read-rules.ts';
 import { readShape } from '#core/craft/techniques/read-shape.ts';
@@ -113,29 +113,39 @@ function check(band: TabbyBand, heightMm: number, loom: DressedLoom, report: Ban
   });
 }
 
-/** Weft of many rows, by yarn. */
-function weaveAreas(rows: readonly (readonly YarnArea[])[], loom: DressedLoom): ReadonlyMap<string, number> {
-  const threadMm = new Map<string, number>();
-  for (const area of rows.flat()) {
-    const lengthMm = areaLength(area, picksOn(loom, area.yarn), threadOn(loom, area.yarn).compressedMm);
-    threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + lengthMm);
-  }
-  return threadMm;
+/** The rows that shapes may stand in; all others are the ground from edge to edge. */
+function rowsWithShapes(shapes: readonly PlacedShape[], rows: number): { readonly first: number; readonly end: number } {
+  const first = Math.min(rows, ...shapes.map(({ firstRow }) => firstRow));
+  const end = Math.max(first, ...shapes.map(({ firstRow, spans }) => Math.min(rows, firstRow + spans.length)));
+  return { first, end };
 }
 
 function weave(band: TabbyBand, heightMm: number, loom: DressedLoom): Woven {
   const grid = gridOf(band, heightMm, loom);
   const shapes = (band.shapes ?? []).map((shape) => placeShape(shape, grid));
-  const rows = Array.from({ length: grid.rows }, (_, row) => areasOfRow(row, band.yarn, shapes, grid.ends));
-  const uses = [...weaveAreas(rows, loom)].map(([role, threadMm]): YarnUse => {
-    const rowMm = pickLength(loom.workingEnds, picksOn(loom, role));
-    return { role, carry: 'shuttle', threadMm, yarnMm: threadMm * threadOn(loom, role).strands, rowMm };
-  });
+  const { first, end } = rowsWithShapes(shapes, grid.rows);
+  const pickMm = (role: string): number => pickLength(loom.workingEnds, picksOn(loom, role));
+  const threadMm = new Map([[band.yarn, (grid.rows - (end - first)) * pickMm(band.yarn)]]);
+  let colourChanges = 0;
+  for (let row = first; row < end; row += 1) {
+    const areas = areasOfRow(row, band.yarn, shapes, grid.ends);
+    colourChanges += areas.length - 1;
+    for (const area of areas) {
+      const areaMm = areaLength(area, picksOn(loom, area.yarn), threadOn(loom, area.yarn).compressedMm);
+      threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + areaMm);
+    }
+  }
   return {
     picks: { role: band.yarn, rows: grid.rows, rawRows: heightMm / grid.pickSpacingMm },
     counts: { picks: grid.rows },
-    uses,
-    work: { rows: grid.rows, colourChanges: rows.reduce((changes, areas) => changes + areas.length - 1, 0) },
+    uses: [...threadMm].map(([role, mm]): YarnUse => ({
+      role,
+      carry: 'shuttle',
+      threadMm: mm,
+      yarnMm: mm * threadOn(loom, role).strands,
+      rowMm: pickMm(role),
+    })),
+    work: { rows: grid.rows, colourChanges },
   };
 }
 

@@ -1,0 +1,97 @@
+/** Facts of the trade: common practice without a source, held against the reckoning with a wide tolerance. */
+import { describe, expect, test } from 'vitest';
+import { TOP_FOR_TYING_MM } from '#core/craft/defaults.ts';
+import { dowelLength } from '#core/craft/hanging.ts';
+import { topAllowance } from '#core/craft/loom-height.ts';
+import { endsOnNails, endsPerMm, nailsOnRail, workingSpacing } from '#core/craft/nails.ts';
+import { adviseSpacing } from '#core/craft/sett.ts';
+import { rovingDiameter } from '#core/craft/yarn/roving.ts';
+import { YARN_CLASSES } from '#core/craft/yarn/classes.ts';
+import { loftFromWraps } from '#core/craft/yarn/diameter.ts';
+import workedPiece from './worked-piece.json' with { type: 'json' };
+import { planOf } from './worked-piece.ts';
+
+const INCH = 25.4;
+const QUARTER = INCH / 4;
+const HALF = INCH / 2;
+const COMMON_WARP_MM = 0.8;
+
+/** Thickness of a class in the middle of its wraps. */
+const loftOf = (number: number): number => {
+  const range = YARN_CLASSES[number]?.wrapsPerInch ?? { min: 1, max: 1 };
+  return loftFromWraps((range.min + Math.min(range.max, 40)) / 2);
+};
+
+describe('spacing', () => {
+  test.each([5, 6])('class %i is too thick for ends a quarter inch apart, and suits half an inch', (number) => {
+    expect(adviseSpacing(QUARTER, COMMON_WARP_MM, loftOf(number))).toBe('too-thick');
+    expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('suits');
+  });
+
+  test('roving is too thick for a quarter inch', () => {
+    expect(adviseSpacing(QUARTER, COMMON_WARP_MM, rovingDiameter(4000))).toBe('too-thick');
+  });
+
+  test.each([1, 2])('class %i by itself is too thin for half an inch', (number) => {
+    expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('too-thin');
+    expect(adviseSpacing(QUARTER, COMMON_WARP_MM, loftOf(number))).not.toBe('too-thick');
+  });
+
+  test('ends a quarter inch apart become half an inch by doubling them, and by warping every second nail', () => {
+    const all = { pitchMm: HALF, warping: 'zigzag' } as const;
+    const inner = { pitchMm: INCH, warping: 'zigzag' } as const;
+    expect(workingSpacing(all, 1)).toBeCloseTo(QUARTER, 12);
+    expect(workingSpacing(all, 2)).toBeCloseTo(HALF, 12);
+    expect(workingSpacing(inner, 1)).toBeCloseTo(HALF, 12);
+    expect(endsPerMm(inner)).toBeCloseTo(endsPerMm(all) / 2, 12);
+  });
+
+  test('a yarn too thin for its ends warns, and stops warning when strands are taken together', () => {
+    const thin = { metresPer100g: 400 };
+    const loose = (yarn: object): boolean =>
+      planOf({
+        ...workedPiece,
+        loom: { ...workedPiece.loom, nailPitchMm: 2 * QUARTER },
+        yarns: { ...workedPiece.yarns, A: yarn },
+      }).warnings.some(({ code, path }) => code === 'W_LOOSE' && path === '/yarns/A');
+    expect(loose(thin)).toBe(true);
+    expect(loose({ ...thin, strands: 3 })).toBe(false);
+  });
+});
+
+describe('bare warp', () => {
+  test('two to three inches stay unwoven where loops are tied to the rod', () => {
+    expect(topAllowance(TOP_FOR_TYING_MM, undefined)).toBeGreaterThanOrEqual(50);
+    expect(topAllowance(TOP_FOR_TYING_MM, undefined)).toBeLessThanOrEqual(76);
+  });
+
+  test('a spacer card of six inches sets the room for a fringe', () => {
+    const { cut, loom } = planOf({
+      ...workedPiece,
+      loom: { ...workedPiece.loom, insideHeightMm: 700 },
+      allowances: { ...workedPiece.allowances, bottomMm: 152.4 },
+    });
+    expect(cut.spacerCard.heightMm).toBe(152.4);
+    expect(loom.bottomMm).toBe(152.4);
+  });
+});
+
+test('a shuttle of three draws weaves eight to nine rows of a piece 16 in wide at half-inch spacing', () => {
+  const { yarns } = planOf({
+    ...workedPiece,
+    size: { widthMm: 16 * INCH, heightMm: 400 },
+    loom: { ...workedPiece.loom, nailPitchMm: INCH, insideHeightMm: 620 },
+    allowances: { ...workedPiece.allowances, loadMm: 3 * 1200 },
+    yarns: { ...workedPiece.yarns, A: { metresPer100g: 115, wrapsPerInch: 7.5 } },
+  });
+  expect(yarns['A']?.rowsPerLoad).toBeGreaterThanOrEqual(8);
+  expect(yarns['A']?.rowsPerLoad).toBeLessThanOrEqual(9);
+});
+
+test('two dowels for pieces of 16 in come from one length of 48, and one fits the frame that takes the piece', () => {
+  const dowel = dowelLength(16 * INCH);
+  expect(2 * dowel).toBeLessThan(48 * INCH);
+  const frame = 20 * INCH;
+  expect(endsOnNails(nailsOnRail(frame, HALF), 'zigzag') * QUARTER).toBeGreaterThan(16 * INCH);
+  expect(dowel).toBeLessThan(frame);
+});
