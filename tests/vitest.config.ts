@@ -23,6 +23,8 @@ export default defineConfig({
       {
         test: {
           name: 'server', ...shared, environment: 'node',
+          // Two modules that only Astro's own build knows.
+          alias: { 'astro:middleware': `${root}tests/support/astro-middleware.ts`, 'astro:actions': `${root}tests/support/astro-actions.ts` },
           include: ['tests/server/**/*.test.ts'],
           exclude: [withoutDatabase],
           globalSetup: ['tests/support/database-server.ts'],

@@ -88,8 +88,9 @@ export const sessionAdapter: Adapter = {
     return rows.map((row) => sessionOf(row));
   },
   async setSession({ id, userId, expiresAt, attributes }) {
-    const idleEnd = new Date(Date.now() + attributes.idleSeconds * 1_000);
-    await Session.create({ id, userId, expiresAt: idleEnd < expiresAt ? idleEnd : expiresAt, ...attributes });
+    const idleEnd = Date.now() + attributes.idleSeconds * 1_000;
+    const earliest = Math.min(idleEnd, attributes.endsAt.getTime(), expiresAt.getTime());
+    await Session.create({ id, userId, expiresAt: new Date(earliest), ...attributes });
   },
   /** Slides by the session's own idle time and never past its end, at most once in a tenth of that time. */
   async updateSessionExpiration(sessionId) {

@@ -39,7 +39,12 @@ export const RATE_RULES = {
 export function networkOf(ip: string): string {
   const v4 = /(?:^|:)(\d+\.\d+\.\d+)\.\d+$/.exec(ip);
   if (v4?.[1] !== undefined) return v4[1];
-  return ip.split(':').slice(0, 4).join(':');
+  const groupsOf = (side: string): string[] => (side === '' ? [] : side.split(':').map((group) => Number.parseInt(group, 16).toString(16)));
+  // `::` stands for as many groups of noughts as are missing from eight.
+  const [left = '', right = ''] = ip.split('::');
+  const [head, tail] = [groupsOf(left), groupsOf(right)];
+  const noughts = Array.from({ length: Math.max(0, 8 - head.length - tail.length) }, () => '0');
+  return [...head, ...noughts, ...tail].slice(0, 4).join(':');
 }
 
 const idOf = (rule: RateRule, who: string): string => `${rule.name}:${createHash('sha256').update(who).digest('hex').slice(0, 40)}`;

@@ -15,7 +15,6 @@ export type RouteRule =
   | 'steward';
 
 export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
-  '/': 'public',
   '/refused': 'public',
   '/404': 'public',
   '/500': 'public',
