@@ -29,3 +29,14 @@ export interface MediaDetail {
   readonly chapters?: readonly Chapter[];
   readonly cues?: readonly Cue[];
 }
+
+/** A picture or video of a series that is ready to be shown. */
+export interface SeriesMediaFile {
+  readonly kind: 'picture' | 'video';
+  /** Its name in the series, by which lessons speak of it. */
+  readonly name: string;
+  readonly title: string;
+  readonly publicId: string;
+  readonly files: MediaFiles;
+  readonly detail: MediaDetail;
+}
