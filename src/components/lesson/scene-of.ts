@@ -5,7 +5,7 @@ import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
 import type { LessonContents } from '#core/lesson-text/contents.ts';
-import { amountText, formatAmount } from '#core/units/format-amount.ts';
+import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import type { LessonScene, SceneAmount, SceneFigure, ScenePicture, SceneVideo, StepForm } from './scene.ts';
 
