@@ -4,4 +4,4 @@ import { getViteConfig } from 'astro/config';
 const root = new URL('../..', import.meta.url).pathname;
 const test = { name: 'astro', root, include: ['tests/astro/**/*.test.ts'], environment: 'node', env: { TZ: 'America/New_York' } };
 
-export default getViteConfig({ test } as Parameters<typeof getViteConfig>[0]);
+export default getViteConfig({ test });

@@ -31,7 +31,7 @@ export async function buildLesson(given: Partial<CreationAttributes<Lesson>> = {
     const source = 'Weave **one row**.';
     const reading = parseLessonText(source);
     if (!reading.ok) throw new RangeError(source);
-    const version = await LessonVersion.create({ lessonId: lesson.id, number: 1, source, tree: reading.tree, facts: factsOf(reading) });
+    const version = await LessonVersion.create({ lessonId: lesson.id, number: 1, source, tree: reading.tree, facts: factsOf(reading.tree) });
     await lesson.update({ publishedVersionId: version.id, draftSource: source, draftReading: reading });
   }
   return lesson;

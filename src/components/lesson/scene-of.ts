@@ -4,7 +4,7 @@ import { amountOf } from '#core/craft/amounts.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
-import type { LessonContents } from '#core/lesson-text/contents.ts';
+import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import type { LessonScene, SceneAmount, SceneFigure, ScenePicture, SceneVideo, StepForm } from './scene.ts';
@@ -21,7 +21,7 @@ export interface SeriesMediaFile {
 }
 
 export interface SceneSources {
-  readonly contents: LessonContents;
+  readonly facts: LessonFacts;
   /** The person's piece, or the pattern piece; absent while a series has none. */
   readonly piece?: { readonly piece: Piece; readonly plan: Plan };
   readonly units: Units;
@@ -32,20 +32,20 @@ export interface SceneSources {
 
 /** The scene of one lesson. What a source does not have is left out of it, and the components say so in its place. */
 export function sceneOf(sources: SceneSources): LessonScene {
-  const { contents, ticked, stepForm } = sources;
+  const { facts, ticked, stepForm } = sources;
   return {
     amounts: amountsOf(sources),
     figures: figuresOf(sources),
-    pictures: entries(namesOf(contents, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
-    videos: entries(namesOf(contents, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
+    pictures: entries(namesOf(facts, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
+    videos: entries(namesOf(facts, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
     ticked: new Set(ticked),
     ...(stepForm === undefined ? {} : { stepForm }),
   };
 }
 
-function amountsOf({ contents, piece: of, units }: SceneSources): Record<string, SceneAmount> {
+function amountsOf({ facts, piece: of, units }: SceneSources): Record<string, SceneAmount> {
   if (of === undefined) return {};
-  return entries(contents.amounts, (key) => {
+  return entries(facts.amounts, (key) => {
     const amount = amountOf(key, of.piece, of.plan);
     if (!amount.ok) return undefined;
     const { label, howReckoned } = amount.value;
@@ -54,9 +54,9 @@ function amountsOf({ contents, piece: of, units }: SceneSources): Record<string,
   });
 }
 
-function figuresOf({ contents, piece: of, units }: SceneSources): Record<string, SceneFigure> {
+function figuresOf({ facts, piece: of, units }: SceneSources): Record<string, SceneFigure> {
   if (of === undefined) return {};
-  return entries(contents.figures, (kind) => ({ svg: drawFigure(kind, { ...of, units }) }));
+  return entries(facts.figures, (kind) => ({ svg: drawFigure(kind, { ...of, units }) }));
 }
 
 function entries<T, K extends string>(names: readonly K[], find: (name: K) => T | undefined): Record<string, T> {
@@ -68,8 +68,8 @@ function entries<T, K extends string>(names: readonly K[], find: (name: K) => T 
   );
 }
 
-function namesOf(contents: LessonContents, kind: 'picture' | 'video'): string[] {
-  return contents.media.filter((entry) => entry.kind === kind).map(({ name }) => name);
+function namesOf(facts: LessonFacts, kind: 'picture' | 'video'): string[] {
+  return facts.media.filter((entry) => entry.kind === kind).map(({ name }) => name);
 }
 
 function mediaNamed({ media }: SceneSources, kind: 'picture' | 'video', name: string): SeriesMediaFile | undefined {

@@ -6,7 +6,7 @@
 // allowed into a tree of our own (read-block.ts, read-inline.ts), name headings and settle links within the lesson.
 import type { Root } from 'mdast';
 import { characterKind, characterName } from './characters.ts';
-import { contentsOf, type LessonContents } from './contents.ts';
+import { factsOf, type LessonFacts } from './lesson-facts.ts';
 import { LIMITS } from './limits.ts';
 import { plainWords } from './plain-text.ts';
 import { preScan } from './pre-scan.ts';
@@ -19,7 +19,7 @@ import { surveyTree, type Definitions } from './survey.ts';
 import { headingAnchor, stepAnchor, TREE_VERSION, type Block, type LessonTree, type OutlineEntry } from './tree.ts';
 import type { Walk } from './walk.ts';
 
-export interface LessonText extends LessonContents {
+export interface LessonText extends LessonFacts {
   ok: true;
   tree: LessonTree;
   problems: [];
@@ -46,9 +46,9 @@ export function parseLessonText(source: string): LessonText | RefusedText {
   const walk = walkTree(read.root, text, survey.definitions, tree);
   if (walk.problems.length > 0) return { ok: false, problems: inOrder(walk.problems) };
   nameHeadings(tree.children);
-  const contents = contentsOf(tree);
-  const warnings = [...settleInsideLinks(walk, contents.outline), ...unseenCharacters(text)].slice(0, LIMITS.problems);
-  return { ok: true, tree, ...contents, problems: [], warnings: inOrder(warnings) };
+  const facts = factsOf(tree);
+  const warnings = [...settleInsideLinks(walk, facts.outline), ...unseenCharacters(text)].slice(0, LIMITS.problems);
+  return { ok: true, tree, ...facts, problems: [], warnings: inOrder(warnings) };
 }
 
 function walkTree(root: Root, source: string, definitions: Definitions, tree: LessonTree): Walk {

@@ -39,7 +39,7 @@ async function publishDraft(ctx: Context, { lesson, text }: Draft): Promise<void
     number: (last ?? 0) + 1,
     source: lesson.draftSource,
     tree: text.tree,
-    facts: factsOf(text),
+    facts: factsOf(text.tree),
     authorId: ctx.actor?.userId ?? null,
   });
   await lesson.update({ publishedVersionId: version.id });

@@ -5,7 +5,7 @@ import { stepInHand } from '#components/lesson/scene.ts';
 import { sceneOf, type SceneSources, type SeriesMediaFile } from '#components/lesson/scene-of.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import { contentsOf } from '#core/lesson-text/contents.ts';
+import { factsOf } from '#core/lesson-text/lesson-facts.ts';
 import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 
 const folder = new URL('../../../../content/series/low-tide/', import.meta.url);
@@ -17,7 +17,7 @@ const plan = planned.value;
 function sources(source: string, extra: Partial<SceneSources> = {}): SceneSources {
   const read = parseLessonText(source);
   if (!read.ok) throw new Error(read.problems[0]?.reason);
-  return { contents: contentsOf(read.tree), piece: { piece, plan }, units: 'cm', media: [], ticked: [], ...extra };
+  return { facts: factsOf(read.tree), piece: { piece, plan }, units: 'cm', media: [], ticked: [], ...extra };
 }
 
 const file = { key: 'x/y', contentType: 'video/mp4', byteCount: 1 };
@@ -77,9 +77,9 @@ describe('Low Tide', () => {
   test.each(lessons)('%s finds each of its amounts and figures in the piece', (name) => {
     const from = sources(readFileSync(new URL(name, folder), 'utf8'));
     const scene = sceneOf(from);
-    expect(Object.keys(scene.amounts).sort()).toEqual([...from.contents.amounts].sort());
+    expect(Object.keys(scene.amounts).sort()).toEqual([...from.facts.amounts].sort());
     expect(Object.values(scene.amounts).filter(({ parts }) => parts.length === 0)).toEqual([]);
-    expect(Object.keys(scene.figures).sort()).toEqual([...from.contents.figures].sort());
+    expect(Object.keys(scene.figures).sort()).toEqual([...from.facts.figures].sort());
   });
 });
 
