@@ -15,6 +15,8 @@ export type RouteRule =
   | 'steward';
 
 export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
+  '/handbook': 'public',
+  '/handbook/[...slug]': 'public',
   '/refused': 'public',
   '/404': 'public',
   '/500': 'public',

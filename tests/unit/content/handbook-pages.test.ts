@@ -2,9 +2,10 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parse } from 'yaml';
-import { neighboursOf, pagesByTopic } from '#components/handbook/reading-order.ts';
+import { LOW_TIDE } from '#components/handbook/pattern.ts';
+import { HANDBOOK_TOPICS, neighboursOf, pagesByTopic } from '#core/handbook/reading-order.ts';
 import { isTableName } from '#components/handbook/tables.ts';
-import { HANDBOOK_TOPICS, HandbookHead } from '#contracts/handbook.ts';
+import { HandbookHead } from '#contracts/handbook.ts';
 import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
 
 const folder = new URL('../../../content/handbook/', import.meta.url);
@@ -57,6 +58,7 @@ describe.each(pages)('$id', (page) => {
     const kinds = valuesOf(page, 'Figure', 'of');
     if (page.data.topic !== 'yarn') expect(kinds.length).toBeGreaterThanOrEqual(1);
     for (const kind of kinds) expect(FIGURE_KINDS).toContain(kind);
+    expect(new Set(kinds).size).toBe(kinds.length);
     for (const caption of valuesOf(page, 'Figure', 'caption')) expect(caption.length).toBeGreaterThan(15);
     expect(valuesOf(page, 'Figure', 'caption')).toHaveLength(kinds.length);
   });
@@ -65,6 +67,11 @@ describe.each(pages)('$id', (page) => {
     for (const name of valuesOf(page, 'Reckoned', 'of')) expect(isTableName(name), name).toBe(true);
     const examples = valuesOf(page, 'InLowTide', 'of');
     expect(new Set(examples).size).toBe(examples.length);
+  });
+
+  test('shows the cloth of a band the pattern has, if any', () => {
+    const { swatch } = page.data;
+    if (swatch !== undefined) expect(LOW_TIDE.piece.bands.map((band) => band.name)).toContain(swatch);
   });
 
   test('uses no component and no tag but the five it may', () => {

@@ -2,7 +2,10 @@
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { parse } from 'yaml';
+import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { SeriesFile } from '#contracts/series-folder.ts';
+import { amountOf } from '#core/craft/amounts.ts';
+import { fitPiece } from '#core/craft/fit.ts';
 import { parseLessonText, type LessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { plainWords } from '#core/lesson-text/plain-text.ts';
 import type { Block, Component, LessonNode } from '#core/lesson-text/tree.ts';
@@ -130,6 +133,50 @@ describe('Low Tide', () => {
       expect(componentsNamed(after, 'Step').length).toBeGreaterThan(0);
       expect(plainWords(caution.children)).toMatch(/general information/u);
       expect(plainWords(caution.children)).toMatch(/qualified person|doctor/u);
+    }
+  });
+
+  test.each(series.lessons)('$file asks only for amounts the plan gives, in its text and in its list', ({ file, gathering }) => {
+    const keys = [...lessonOf('low-tide', file).amounts, ...gathering.flatMap(({ amount }) => amount ?? [])];
+    for (const key of keys) expect(amountOf(key, LOW_TIDE.piece, LOW_TIDE.plan).ok, key).toBe(true);
+  });
+
+  test('has its amounts for a student with coarser nails and ends in pairs as well', () => {
+    const fitted = fitPiece(LOW_TIDE.piece, { loom: { nailPitchMm: 6.35, insideWidthMm: 500, insideHeightMm: 650, warping: 'zigzag' }, endsTogether: 2 });
+    if (!fitted.ok) throw new Error(fitted.problems.map(({ message }) => message).join(' '));
+    const { piece, plan } = fitted.value;
+    for (const { file, gathering } of series.lessons) {
+      const keys = [...lessonOf('low-tide', file).amounts, ...gathering.flatMap(({ amount }) => amount ?? [])];
+      for (const key of keys) expect(amountOf(key, piece, plan).ok, key).toBe(true);
+    }
+  });
+
+  // What the texts say in words of their own, because no amount of the plan says it.
+  test('says of the piece what the piece is', () => {
+    const { bands, yarns } = LOW_TIDE.piece;
+    const named = (name: string) => bands.find((band) => band.name === name);
+    expect(named('fringe-under')).toMatchObject({ technique: 'rya', strands: 8, legEnds: 1, trimMm: 10 });
+    expect(named('fringe-over')).toMatchObject({ technique: 'rya', strands: 8, legEnds: 1 });
+    for (const ridge of ['ridge-low', 'ridge-middle', 'ridge-high']) {
+      expect(named(ridge)).toMatchObject({ technique: 'soumak', over: 4, back: 2, tabbyBetween: 0, yarn: 'ridge' });
+    }
+    expect(yarns['ridge']?.strands).toBe(4);
+    expect([named('calm-low'), named('calm-high'), named('sky')]).toMatchObject([{ yarn: 'sand' }, { yarn: 'water' }, { yarn: 'water' }]);
+    expect(named('foot-hem')).toMatchObject({ bundleEnds: 2, reachPicks: 2 });
+  });
+
+  test('draws the dunes in the shares the fifth part tells', () => {
+    const dunes = LOW_TIDE.piece.bands.find((band) => band.name === 'dunes');
+    if (dunes?.technique !== 'tabby' || dunes.heightMm === undefined) throw new Error('the dunes are tabby of a set height');
+    const { widthMm } = LOW_TIDE.piece.size;
+    const [sand, bank, samphire] = dunes.shapes ?? [];
+    expect([sand?.yarn, bank?.yarn, samphire?.yarn]).toEqual(['sand', 'shore', 'green']);
+    const shares: [typeof sand, number, number, number][] = [[sand, 1 / 2, 4 / 5, 2 / 3], [bank, 1 / 5, 1 / 5, 1 / 2], [samphire, 1 / 4, 1 / 2, 0.4]];
+    for (const [shape, foot, height, top] of shares) {
+      const { baseMm = 0, heightMm = 0, leanMm = 0 } = shape ?? {};
+      expect(Math.abs(baseMm / widthMm - foot)).toBeLessThan(0.03);
+      expect(Math.abs(heightMm / dunes.heightMm - height)).toBeLessThan(0.03);
+      expect(Math.abs((baseMm / 2 + leanMm) / baseMm - top)).toBeLessThan(0.03);
     }
   });
 
