@@ -28,9 +28,10 @@ const CLOSE_ENOUGH_MM = 0.5;
 
 function readHeight(fields: Fields): BandHeight {
   if (!fields.has('fill')) return { heightMm: fields.number('heightMm', TABBY_HEIGHT) };
-  if (fields.take('fill') !== true) fields.reject('E_ENUM', 'fill', 'A band that fills the rest says true here; any other leaves it out.');
-  if (fields.has('heightMm')) {
-    fields.take('heightMm');
+  const given = fields.take('heightMm') !== undefined;
+  if (fields.take('fill') !== true) {
+    fields.reject('E_ENUM', 'fill', 'A band that fills the rest says true here; any other leaves it out.');
+  } else if (given) {
     fields.reject('E_ENUM', 'heightMm', 'A band has a height or fills the rest. Give one of the two.');
   }
   return { fill: true };

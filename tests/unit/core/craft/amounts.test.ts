@@ -1,0 +1,143 @@
+import { describe, expect, test } from 'vitest';
+import { AMOUNT_KEYS, amountKeysOf, amountOf, type Amount } from '#core/craft/amounts.ts';
+import { leastTrust } from '#core/craft/amounts/amount-types.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import { amountText } from '#core/units/format-amount.ts';
+import { pieceWith, planOf, PLAIN_PIECE } from './a-piece.ts';
+
+const PIECE: Piece = pieceWith({
+  warp: { yarn: { tex: 400, ball: { metres: 250, grams: 100 } }, parity: 'even' },
+  dowel: { diameterMm: 12 },
+  yarns: {
+    ground: { metresPer100g: 180, label: 'Fenwool 6/2', wrapsPerInch: 10, ball: { metres: 90, grams: 50 } },
+    fringe: { metresPer100g: 100 },
+  },
+  bands: [
+    { name: 'fringe-low', technique: 'rya', yarn: 'fringe', strands: 3, legEnds: 1, pileMm: 150, trimMm: 10, rows: 2, heightMm: 12 },
+    { name: 'ridge', technique: 'soumak', yarn: 'fringe', over: 4, back: 2, rows: 3, tabbyBetween: 1, tabbyYarn: 'ground' },
+    { name: 'fluff', technique: 'roving', yarn: 'fringe', over: 4, bulgeMm: 5, heightMm: 20 },
+    { name: 'sky', technique: 'tabby', yarn: 'ground', fill: true },
+  ],
+});
+const PLAN = planOf(PIECE);
+
+const amount = (key: string, piece: Piece = PIECE): Amount => {
+  const outcome = amountOf(key, piece, planOf(piece));
+  if (!outcome.ok) throw new Error(outcome.problems[0]?.message);
+  return outcome.value;
+};
+const words = (key: string): string => amountText(amount(key), 'cm').replaceAll('\u00a0', ' ');
+const whyNot = (key: string): string => {
+  const outcome = amountOf(key, PIECE, PLAN);
+  return outcome.ok ? 'it is told' : `${outcome.problems[0]?.code ?? ''} ${outcome.problems[0]?.message ?? ''}`;
+};
+
+test.each([
+  ['ends', '62 ends'],
+  ['nails', '32 nails'],
+  ['spacing', '5 mm'],
+  ['width', '30 cm'],
+  ['height', '40 cm'],
+  ['wound-width', '31 cm'],
+  ['loom.width', '35 cm'],
+  ['loom.height', '50.9 cm'],
+  ['warp', '36 m'],
+  ['warp.mass', '14 g'],
+  ['warp.balls', '1 ball'],
+  ['yarn.ground', '96 m'],
+  ['yarn.ground.mass', '53 g'],
+  ['yarn.ground.balls', '2 balls'],
+  ['yarn.fringe', '79 m'],
+  ['band.fringe-low.height', '1.2 cm'],
+  ['band.fringe-low.rows', '2 rows'],
+  ['band.fringe-low.knots', '62 knots'],
+  ['band.fringe-low.strands', '186 strands'],
+  ['band.fringe-low.cut', '35.5 cm'],
+  ['band.ridge.stitches', '90 stitches'],
+  ['band.ridge.rows', '3 rows'],
+  ['band.sky.rows', '249 rows'],
+  ['band.sky.height', '36 cm'],
+  ['spacer.width', '32.5 cm'],
+  ['spacer.height', '6 cm'],
+  ['dowel.length', '38 cm'],
+  ['dowel.diameter', '12 mm'],
+  ['cord', '72 cm'],
+  ['pick', '33 cm'],
+  ['rows-per-load', '24 rows'],
+])('%s is %s', (key, text) => {
+  expect(words(key)).toBe(text);
+});
+
+test('the amount to have in hand is with margin, for length and mass alike', () => {
+  const { withMarginMm, netMm, massG } = PLAN.yarns['ground'] ?? { withMarginMm: 0, netMm: 1, massG: 0 };
+  expect(amount('yarn.ground')).toMatchObject({ kind: 'length', mm: withMarginMm, label: 'Fenwool 6/2' });
+  expect(amount('yarn.ground.mass')).toMatchObject({ kind: 'mass', grams: expect.closeTo((massG * withMarginMm) / netMm, 9) as unknown });
+});
+
+test('every amount says how it was got: formula, what went in, source and trust', () => {
+  for (const key of amountKeysOf(PIECE, PLAN)) {
+    const { howReckoned, label } = amount(key);
+    expect(label, key).not.toBe('');
+    expect(howReckoned.formula, key).not.toBe('');
+    expect(howReckoned.source, key).not.toBe('');
+    expect(['measured', 'label', 'formula', 'class'], key).toContain(howReckoned.trust);
+  }
+});
+
+test('every kind of amount is told by this piece, written out by role and band', () => {
+  const keys = amountKeysOf(PIECE, PLAN);
+  for (const key of AMOUNT_KEYS) {
+    const pattern = new RegExp(`^${key.replaceAll('.', '\\.').replace('<role>', '[a-z]+').replace('<name>', '[a-z-]+')}$`, 'u');
+    expect(keys.some((written) => pattern.test(written)), key).toBe(true);
+  }
+  expect(keys).not.toContain('yarn.fringe.balls');
+  expect(keys).not.toContain('band.fluff.rows');
+});
+
+describe('trust', () => {
+  test('a counted swatch makes rows and their yarn measured, a rule of thumb leaves them reckoned', () => {
+    const swatch = { ...PIECE, beat: { picksPerCm: 7 } };
+    expect(amount('band.sky.rows').howReckoned.trust).toBe('formula');
+    expect(amount('band.sky.rows', swatch).howReckoned.trust).toBe('measured');
+    expect(amount('yarn.ground', swatch).howReckoned.trust).toBe('measured');
+    expect(amount('yarn.ground.mass', swatch).howReckoned.trust).toBe('label');
+    expect(amount('yarn.fringe', swatch).howReckoned.trust).toBe('formula');
+  });
+
+  test('is that of the least certain input', () => {
+    expect(leastTrust('measured')).toBe('measured');
+    expect(leastTrust('measured', 'class', 'label')).toBe('class');
+    expect(leastTrust('label', 'measured')).toBe('label');
+  });
+});
+
+describe('an amount that is not told says why', () => {
+  test.each([
+    ['weft', 'E_ENUM No amount is called “weft”.'],
+    ['', 'E_ENUM No amount is called “”.'],
+    ['constructor', 'E_ENUM No amount is called “constructor”.'],
+    ['yarn.sky', 'E_ENUM This piece has no yarn in the role “sky”.'],
+    ['yarn.constructor', 'E_ENUM This piece has no yarn in the role “constructor”.'],
+    ['yarn.ground.colour', 'E_ENUM A yarn has no “colour”. It has mass and balls.'],
+    ['yarn.fringe.balls', 'E_ENUM How long a ball of “fringe” is has not been said.'],
+    ['yarn', 'E_ENUM No amount is called “yarn”.'],
+    ['yarn.ground.mass.net', 'E_ENUM No amount is called “yarn.ground.mass.net”.'],
+    ['band.sky', 'E_ENUM No amount is called “band.sky”.'],
+    ['band.dune.height', 'E_ENUM This piece has no band called “dune”.'],
+    ['band.sky.knots', 'E_ENUM A band of tabby has no knots.'],
+    ['band.sky.strands', 'E_ENUM A band of tabby has no strands.'],
+    ['band.sky.cut', 'E_ENUM A band of tabby has no cut.'],
+    ['band.sky.stitches', 'E_ENUM A band of tabby has no stitches.'],
+    ['band.fluff.rows', 'E_ENUM A band of roving has no rows.'],
+    ['band.sky.toString', 'E_ENUM A band has no “toString”. It has height, rows, knots, stitches, strands, cut, yarn.'],
+    ['loom.depth', 'E_ENUM No amount is called “loom.depth”.'],
+  ])('%s: %s', (key, reason) => {
+    expect(whyNot(key)).toBe(reason);
+  });
+
+  test('a piece without dowel, balls or picks does not tell theirs', () => {
+    const bare = pieceWith({ size: { widthMm: 300, heightMm: 12 }, bands: [{ technique: 'rya', yarn: 'ground', strands: 3, legEnds: 1, pileMm: 50, trimMm: 0, rows: 1, heightMm: 12 }] });
+    for (const key of ['dowel.length', 'dowel.diameter', 'cord', 'warp.balls', 'rows-per-load']) expect(amountOf(key, bare, planOf(bare)).ok, key).toBe(false);
+    expect(amountOf('rows-per-load', PLAIN_PIECE, planOf(PLAIN_PIECE)).ok).toBe(true);
+  });
+});
