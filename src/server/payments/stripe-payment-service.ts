@@ -11,6 +11,8 @@ const NETWORK_RETRIES = 2;
 /** Tries after a 429, which the library leaves to its caller. */
 const BUSY_RETRIES = 4;
 const BUSY_FIRST_WAIT_MS = 400;
+/** Longest time a checkout stays open: it was made no earlier than this before its end. */
+const LONGEST_LIFE_MS = 24 * 3_600_000;
 /** Of one search for a lost checkout: far more than a day of orders in progress needs. */
 const MOST_SEARCHED = 2000;
 
@@ -41,9 +43,14 @@ export class StripePaymentService implements PaymentService {
     this.#wait = settings.wait ?? ((milliseconds) => new Promise((resolve) => setTimeout(resolve, milliseconds)));
   }
 
-  createCheckout(request: CheckoutRequest): Promise<PaymentAnswer<Checkout>> {
+  async createCheckout(request: CheckoutRequest): Promise<PaymentAnswer<Checkout>> {
     const idempotencyKey = `order:${request.orderId}:checkout:${request.attempt}`;
-    return this.#ask(async () => checkoutOf(await this.#stripe.checkout.sessions.create(sessionParams(request), { idempotencyKey })));
+    const answer = await this.#ask(async () => checkoutOf(await this.#stripe.checkout.sessions.create(sessionParams(request), { idempotencyKey })));
+    if (answer.ok || answer.failure.kind !== 'unreachable') return answer;
+    // A failure is kept under the key and would be told again for a day, even where the checkout was made: so look for it.
+    const made = await this.findCheckout(request.orderId, new Date(request.expiresAt.getTime() - LONGEST_LIFE_MS));
+    const same = made.ok && made.value?.expiresAt.getTime() === request.expiresAt.getTime() ? made.value : undefined;
+    return same === undefined ? answer : { ok: true, value: same };
   }
 
   readCheckout(checkoutId: string): Promise<PaymentAnswer<Checkout>> {
