@@ -1,4 +1,6 @@
-// Puts the page of all components at /_components, in development only: the built site does not know the route.
+// Puts all components at /_components, and the frames of pages below it, in development only: the built site does not
+// know these routes.
+const shown = { '/_components': 'day-and-evening', '/_components/lesson': 'lesson', '/_components/workroom': 'workroom', '/_components/door': 'door' };
 
 /** @returns {import('astro').AstroIntegration} */
 export function showComponents() {
@@ -6,7 +8,8 @@ export function showComponents() {
     name: 'show-components',
     hooks: {
       'astro:config:setup': ({ command, injectRoute }) => {
-        if (command === 'dev') injectRoute({ pattern: '/_components', entrypoint: './src/pages/_components/day-and-evening.astro', prerender: true });
+        if (command !== 'dev') return;
+        for (const [pattern, page] of Object.entries(shown)) injectRoute({ pattern, entrypoint: `./src/pages/_components/${page}.astro`, prerender: true });
       },
     },
   };

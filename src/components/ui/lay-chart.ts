@@ -1,30 +1,20 @@
-// Where the columns of a chart stand. Pixels at the size the chart is drawn for; it scales as a whole.
+// How high the columns of a chart are, and of how many rows each is built. Pixels; their width is the page's affair.
 
 export interface LaidColumn {
-  readonly x: number;
-  readonly top: number;
-  readonly height: number;
-  /** Path of the warp ends within the column. */
-  readonly ends: string;
-  /** Path of the gaps between its picks. */
-  readonly picks: string;
+  readonly heightPx: number;
+  /** Path of the gaps between the rows, from the floor up; longer than any column is wide. */
+  readonly gaps: string;
 }
 
 export interface LaidChart {
-  readonly width: number;
-  readonly height: number;
-  readonly floor: number;
-  readonly columnWidth: number;
   /** What one drawn row stands for. */
   readonly row: number;
   readonly columns: readonly LaidColumn[];
 }
 
-const pickHeight = 4;
+export const rowPx = 4;
 const mostRows = 28;
-const headRoom = 22;
-const footRoom = 22;
-const gap = 10;
+const widerThanAny = 400;
 
 /** The least of 1, 2, 5, 10, 20, 50 … times `row` that keeps the highest column within the room. */
 function coarsened(row: number, highest: number): number {
@@ -34,22 +24,20 @@ function coarsened(row: number, highest: number): number {
 }
 
 /**
- * Lays one column for each value. `row`: what one row stands for at least (seats, or minor units of money).
+ * Builds one column for each value. `row`: what one row stands for at least (seats, or minor units of money).
  * Values under zero are drawn as none; a value that is more than nothing has at least half a row.
  */
 export function layChart(values: readonly number[], row: number): LaidChart {
   if (!(row > 0)) throw new RangeError('A row of a chart must stand for more than nothing');
   const step = coarsened(row, Math.max(0, ...values));
-  const columnWidth = Math.max(28, Math.min(84, Math.floor(620 / Math.max(1, values.length)) - gap));
-  const rows = values.map((value) => (value <= 0 ? 0 : Math.max(0.5, value / step)));
-  const floor = headRoom + Math.ceil(Math.max(4, ...rows)) * pickHeight;
-  const columns = rows.map((count, index) => {
-    const x = index * (columnWidth + gap);
-    const height = count * pickHeight;
-    const top = floor - height;
-    const ends = Array.from({ length: Math.floor(columnWidth / 7) }, (_, end) => `M${x + 3.5 + end * 7} ${top}V${floor}`).join('');
-    const picks = Array.from({ length: Math.max(0, Math.ceil(count) - 1) }, (_, pick) => `M${x} ${floor - (pick + 1) * pickHeight}h${columnWidth}`).join('');
-    return { x, top, height, ends, picks };
+  const columns = values.map((value) => {
+    const rows = value <= 0 ? 0 : Math.max(0.5, value / step);
+    const heightPx = Math.round(rows * rowPx);
+    const gaps = Array.from({ length: Math.max(0, Math.ceil(rows) - 1) }, (_, index) => `M0 ${heightPx - (index + 1) * rowPx}h${widerThanAny}`).join('');
+    return { heightPx, gaps };
   });
-  return { width: Math.max(1, values.length) * (columnWidth + gap) - gap, height: floor + footRoom, floor, columnWidth, row: step, columns };
+  return { row: step, columns };
 }
+
+/** The warp ends in every column; what is too long is clipped by its edge. */
+export const columnEnds = Array.from({ length: Math.floor(widerThanAny / 7) }, (_, index) => `M${index * 7 + 3.5} 0v${mostRows * rowPx}`).join('');

@@ -1,14 +1,14 @@
 import { describe, expect, it } from 'vitest';
-import { layChart } from '#components/ui/lay-chart.ts';
+import { layChart, rowPx } from '#components/ui/lay-chart.ts';
 
-const gaps = (path: string) => path.split('M').length - 1;
+const lines = (path: string) => path.split('M').length - 1;
 
 describe('a chart built of rows', () => {
   it('draws one row for one seat while they fit', () => {
     const chart = layChart([9, 24, 0], 1);
     expect(chart.row).toBe(1);
-    expect(chart.columns.map(({ height }) => height)).toEqual([36, 96, 0]);
-    expect(gaps(chart.columns[0]?.picks ?? '')).toBe(8);
+    expect(chart.columns.map(({ heightPx }) => heightPx / rowPx)).toEqual([9, 24, 0]);
+    expect(lines(chart.columns[0]?.gaps ?? '')).toBe(8);
   });
 
   it('lets one row stand for more when the columns would grow too high, in steps people count by', () => {
@@ -18,15 +18,17 @@ describe('a chart built of rows', () => {
   });
 
   it('shows that there was something, however little', () => {
-    expect(layChart([1, 1000], 1).columns[0]?.height).toBeGreaterThan(0);
-    expect(layChart([0, 1000], 1).columns[0]?.height).toBe(0);
+    expect(layChart([1, 1000], 1).columns[0]?.heightPx).toBeGreaterThan(0);
+    expect(layChart([0, 1000], 1).columns[0]?.heightPx).toBe(0);
   });
 
-  it('stands all columns on one floor, side by side', () => {
-    const { columns, columnWidth, width, floor } = layChart([3, 5, 8, 13], 1);
-    for (const { top, height } of columns) expect(top + height).toBe(floor);
-    columns.slice(1).forEach(({ x }, index) => expect(x).toBeGreaterThanOrEqual((columns[index]?.x ?? 0) + columnWidth));
-    expect((columns.at(-1)?.x ?? 0) + columnWidth).toBe(width);
+  it('keeps every gap between rows inside its column', () => {
+    for (const { heightPx, gaps } of layChart([3, 5.5, 28, 0.2], 1).columns) {
+      for (const [, y] of gaps.matchAll(/M0 (-?[\d.]+)/g)) {
+        expect(Number(y)).toBeGreaterThanOrEqual(0);
+        expect(Number(y)).toBeLessThan(heightPx);
+      }
+    }
   });
 
   it('can be empty', () => {
