@@ -3,12 +3,12 @@
  *
  * The lower fifth stays empty: a player lays the captions there.
  */
+import type { Scene } from '#core/captions/storyboard.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import { escapeWords, num } from '#core/craft/cloth/markup.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { FigureInput } from '#core/craft/figures/figure.ts';
-import type { Scene } from '#core/captions/storyboard.ts';
 
 export const FRAME = { width: 960, height: 540 } as const;
 

@@ -12,6 +12,11 @@ import { drawStoryboard, readStoryboard, type DrawnVideo } from '#server/media/d
 const run = promisify(execFile);
 const VIDEOS = 'content/series/low-tide/videos';
 
+interface Probe {
+  readonly streams: readonly unknown[];
+  readonly format: { readonly duration: string };
+}
+
 async function lowTide() {
   const piece: Piece = JSON.parse(await readFile('content/series/low-tide/piece.json', 'utf8'));
   const plan = planPiece(piece);
@@ -34,7 +39,7 @@ describe('a storyboard drawn as a film', () => {
 
   it('plays anywhere: H.264 in 4:2:0 with a silent AAC track, as long as its scenes', async () => {
     const { stdout } = await run('ffprobe', ['-v', 'error', '-show_entries', 'stream=codec_name,pix_fmt,width,height:format=duration', '-of', 'json', video.videoPath]);
-    const found = JSON.parse(stdout);
+    const found: Probe = JSON.parse(stdout);
     expect(found.streams).toMatchObject([{ codec_name: 'h264', pix_fmt: 'yuv420p', width: 960, height: 540 }, { codec_name: 'aac' }]);
     expect(Number(found.format.duration)).toBeCloseTo(5, 0);
   });

@@ -75,7 +75,7 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: Piece, plan
     case 'roving':
       return { ...base, technique: 'roving', over: band.over, passes: band.passes ?? 1 };
     case 'loop-pile':
-      return { ...base, technique: 'loop-pile', rows: band.rows, loopMm: band.loopMm ?? (Math.PI * (band.rodMm ?? 0)) / 2, groundColour: groundOf(index, piece) };
+      return { ...base, technique: 'loop-pile', rows: band.rows, loopMm: band.loopMm ?? (Math.PI * band.rodMm) / 2, groundColour: groundOf(index, piece) };
     case 'twining':
       return { ...base, technique: 'twining', rows: band.rows };
     case 'hem-stitch':

@@ -1,10 +1,9 @@
 /** A technique as an SVG string, part-way or done, with this person's amounts. Pure and repeatable, as the cloth is. */
-import { escapeWords } from '../cloth/markup.ts';
-import { FIGURE_WIDTH } from './figure.ts';
-import type { FigureInput } from './figure.ts';
-import type { FigureKind } from './figure-kinds.ts';
-import { FIGURES } from './figures.ts';
-import { Scene } from './kit/scene.ts';
+import { escapeWords } from '#core/craft/cloth/markup.ts';
+import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
+import { FIGURE_WIDTH, type FigureInput } from '#core/craft/figures/figure.ts';
+import { FIGURES } from '#core/craft/figures/figures.ts';
+import { Scene } from '#core/craft/figures/kit/scene.ts';
 
 export interface FigureOptions {
   /** Begins every id in the drawing; one page, one id for each figure. Default the kind. */

@@ -1,8 +1,8 @@
 /** What a figure is: an explanatory line drawing of one technique, with this person's own amounts in it. */
-import type { Piece } from '../piece.ts';
-import type { Plan } from '../plan.ts';
+import type { Scene } from '#core/craft/figures/kit/scene.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import type { Plan } from '#core/craft/plan.ts';
 import type { Units } from '#core/units/format-amount.ts';
-import type { Scene } from './kit/scene.ts';
 
 export interface FigureInput {
   readonly piece: Piece;

@@ -1,25 +1,25 @@
 /** All figures by name; a further one is a further line here. */
-import type { Figure } from './figure.ts';
-import type { FigureKind } from './figure-kinds.ts';
-import { BUTTERFLY } from './kinds/butterfly.ts';
-import { CARD_WIDTH } from './kinds/card-width.ts';
-import { CUTTING_OFF } from './kinds/cutting-off.ts';
-import { DOUBLED_ENDS } from './kinds/doubled-ends.ts';
-import { HANGING } from './kinds/hanging.ts';
-import { HEM_STITCH } from './kinds/hem-stitch.ts';
-import { MEASURE_WRAPS } from './kinds/measure-wraps.ts';
-import { OVERHAND_KNOT } from './kinds/overhand-knot.ts';
-import { ROVING } from './kinds/roving.ts';
-import { RYA_KNOT } from './kinds/rya-knot.ts';
-import { SELVEDGE } from './kinds/selvedge.ts';
-import { SHED_STICK } from './kinds/shed-stick.ts';
-import { SLIT } from './kinds/slit.ts';
-import { SOUMAK } from './kinds/soumak.ts';
-import { SPACER_CARD } from './kinds/spacer-card.ts';
-import { TABBY } from './kinds/tabby.ts';
-import { WARPING } from './kinds/warping.ts';
-import { WEAVE_IN } from './kinds/weave-in.ts';
-import { WEDGE } from './kinds/wedge.ts';
+import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { BUTTERFLY } from '#core/craft/figures/kinds/butterfly.ts';
+import { CARD_WIDTH } from '#core/craft/figures/kinds/card-width.ts';
+import { CUTTING_OFF } from '#core/craft/figures/kinds/cutting-off.ts';
+import { DOUBLED_ENDS } from '#core/craft/figures/kinds/doubled-ends.ts';
+import { HANGING } from '#core/craft/figures/kinds/hanging.ts';
+import { HEM_STITCH } from '#core/craft/figures/kinds/hem-stitch.ts';
+import { MEASURE_WRAPS } from '#core/craft/figures/kinds/measure-wraps.ts';
+import { OVERHAND_KNOT } from '#core/craft/figures/kinds/overhand-knot.ts';
+import { ROVING } from '#core/craft/figures/kinds/roving.ts';
+import { RYA_KNOT } from '#core/craft/figures/kinds/rya-knot.ts';
+import { SELVEDGE } from '#core/craft/figures/kinds/selvedge.ts';
+import { SHED_STICK } from '#core/craft/figures/kinds/shed-stick.ts';
+import { SLIT } from '#core/craft/figures/kinds/slit.ts';
+import { SOUMAK } from '#core/craft/figures/kinds/soumak.ts';
+import { SPACER_CARD } from '#core/craft/figures/kinds/spacer-card.ts';
+import { TABBY } from '#core/craft/figures/kinds/tabby.ts';
+import { WARPING } from '#core/craft/figures/kinds/warping.ts';
+import { WEAVE_IN } from '#core/craft/figures/kinds/weave-in.ts';
+import { WEDGE } from '#core/craft/figures/kinds/wedge.ts';
 
 export const FIGURES: Readonly<Record<FigureKind, Figure>> = {
   warping: WARPING,

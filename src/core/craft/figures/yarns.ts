@@ -1,7 +1,7 @@
 /** Which yarn a figure shows: the one this piece uses for the technique, or a plain colour if it does not use it. */
-import type { Band, TechniqueName } from '../piece.ts';
-import { yarnColour } from '../cloth/colour.ts';
-import type { FigureInput } from './figure.ts';
+import { yarnColour } from '#core/craft/cloth/colour.ts';
+import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { Band, TechniqueName } from '#core/craft/piece.ts';
 
 const FALLBACK: Readonly<Record<TechniqueName, string>> = {
   tabby: '#93a8a6',

@@ -60,7 +60,7 @@ function pileRow(band: RyaBand, step: number, fall: number, weave: Weave): strin
       const sway = (weave.chance() - 0.5) * step * 0.9;
       const from = x + ((strand + 0.5) / strands - 0.5) * step * 0.8;
       const tone = Math.floor(weave.chance() * 3);
-      tones[tone] += `M${num(from)} 0q${num(-sway)} ${Math.round(end * 0.55)} ${num(sway * 0.6)} ${end}`;
+      tones[tone] = `${tones[tone] ?? ''}M${num(from)} 0q${num(-sway)} ${Math.round(end * 0.55)} ${num(sway * 0.6)} ${end}`;
     }
   }
   return tones;

@@ -1,15 +1,13 @@
 /** A butterfly: figures of eight, tied at the waist, the yarn drawn from the middle. */
-import type { Figure } from '../figure.ts';
-import { handWay, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { stageOf, stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { trail } from '../kit/trail.ts';
-import { num } from '../../cloth/markup.ts';
-import { countWords } from '../length-words.ts';
-import { techniqueColour } from '../yarns.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { stageOf, stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { countWords } from '#core/craft/figures/length-words.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const LEFT = 150;
 const RIGHT = 410;

@@ -1,13 +1,13 @@
 /** Cutting strands on a card: every turn, cut along one edge, becomes a strand twice as long as the card is wide. */
-import type { Figure, FigureInput } from '../figure.ts';
-import { measure, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { eased, stages } from '../kit/stages.ts';
-import { tube } from '../kit/strand.ts';
-import { CARD, cutMark, flat } from '../kit/tools.ts';
-import { num } from '../../cloth/markup.ts';
-import { lengthWords } from '../length-words.ts';
-import { bandOf, bandPlanOf, techniqueColour } from '../yarns.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { measure, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { eased, stages } from '#core/craft/figures/kit/stages.ts';
+import { tube } from '#core/craft/figures/kit/strand.ts';
+import { CARD, cutMark, flat } from '#core/craft/figures/kit/tools.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, bandPlanOf, techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const TOP = 40;
 const BOTTOM = 160;

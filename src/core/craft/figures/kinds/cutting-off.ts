@@ -1,17 +1,15 @@
 /** Cutting off: loops at the lower nails are cut from the middle outwards, and knotted before the next is cut. */
-import type { Figure } from '../figure.ts';
-import { nail, numeral, wood, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { stageOf } from '../kit/stages.ts';
-import { toPath, tube } from '../kit/strand.ts';
-import { cutMark } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { WARP_WIDTH, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { countWords } from '../length-words.ts';
-import { bandOf, roleColour } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { nail, numeral, wood, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { stageOf } from '#core/craft/figures/kit/stages.ts';
+import { toPath, tube } from '#core/craft/figures/kit/strand.ts';
+import { cutMark } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { WARP_WIDTH, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { countWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, roleColour } from '#core/craft/figures/yarns.ts';
 
 /** From the middle outwards, left and right in turn. */
 const ORDER: readonly number[] = [3, 2, 4, 1, 5, 0, 6];

@@ -1,15 +1,14 @@
 /** Doubled ends: two neighbours are always taken up as one. */
-import type { Figure, FigureInput } from '../figure.ts';
-import { measure, words } from '../kit/marks.ts';
-import { rowRuns } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { layStrand } from '../kit/strand.ts';
-import { needleAt } from '../kit/tools.ts';
-import { layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { num } from '../../cloth/markup.ts';
-import { lengthWords } from '../length-words.ts';
-import { techniqueColour } from '../yarns.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { measure, words } from '#core/craft/figures/kit/marks.ts';
+import { rowRuns } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { layStrand } from '#core/craft/figures/kit/strand.ts';
+import { needleAt } from '#core/craft/figures/kit/tools.ts';
+import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 64, step: 48, count: 10, top: 12, bottom: 206 };
 

@@ -1,10 +1,10 @@
 /** The finished piece on the wall: one cord from two points, the dowel level, a fixing that is strong enough. */
-import type { Figure } from '../figure.ts';
-import { guide, pointer, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { clothPieceOf } from '../../cloth/cloth-piece-of.ts';
-import { drawCloth } from '../../cloth/draw-cloth.ts';
-import { lengthWords } from '../length-words.ts';
+import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
+import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { guide, pointer, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
 
 const WIDTH = 220;
 const LEFT = 30;

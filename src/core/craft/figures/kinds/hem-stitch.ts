@@ -1,16 +1,14 @@
 /** Hem-stitch along the lower edge, from right to left: behind a bundle, round it, behind it again and up through the cloth. */
-import type { Figure, FigureInput } from '../figure.ts';
-import { numeral, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { needleAt } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { endX, layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { countWords } from '../length-words.ts';
-import { bandOf, roleColour, techniqueColour } from '../yarns.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { numeral, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { needleAt } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { countWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 70, step: 56, count: 8, top: 8, bottom: 216 };
 const PITCH = 19;

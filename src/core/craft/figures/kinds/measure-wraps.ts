@@ -1,11 +1,11 @@
 /** Measuring a yarn without a label: snug wraps round a rule, counted over two inches and halved. */
-import type { Figure } from '../figure.ts';
-import { measure, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { tube } from '../kit/strand.ts';
-import { flat } from '../kit/tools.ts';
-import { num } from '../../cloth/markup.ts';
-import { techniqueColour } from '../yarns.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { measure, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { tube } from '#core/craft/figures/kit/strand.ts';
+import { flat } from '#core/craft/figures/kit/tools.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const LEFT = 120;
 const WRAPS = 24;

@@ -1,17 +1,14 @@
 /** The overhand knot: a ring of both ends together, their tips through it, pushed up to the cloth before it closes. */
-import type { Figure } from '../figure.ts';
-import { handWay, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { trail } from '../kit/trail.ts';
-import { warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { bandOf, roleColour } from '../yarns.ts';
-import { shade } from '../../cloth/colour.ts';
-import { toPath } from '../kit/strand.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand, toPath, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { bandOf, roleColour } from '#core/craft/figures/yarns.ts';
 
 const MIDDLE = 280;
 const EDGE_Y = 82;

@@ -1,15 +1,13 @@
 /** Roving: a very thick weft that goes over and under several ends at once and is puffed up where it lies in front. */
-import type { Figure, FigureInput } from '../figure.ts';
-import { measureBeside, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { trail } from '../kit/trail.ts';
-import { endX, layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { countWords, lengthWords } from '../length-words.ts';
-import { bandOf, roleColour, techniqueColour } from '../yarns.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { measureBeside, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 52, step: 38, count: 13, top: 8, bottom: 238 };
 const Y = 140;

@@ -1,18 +1,15 @@
 /** The rya knot: laid over two ends, each half round the outside and up between them, then both drawn down. */
-import type { Figure } from '../figure.ts';
-import { handWay, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { eased, stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { trail } from '../kit/trail.ts';
-import { layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { shade } from '../../cloth/colour.ts';
-import { countWords, lengthWords } from '../length-words.ts';
-import { bandOf, bandPlanOf, roleColour, techniqueColour } from '../yarns.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { eased, stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, bandPlanOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 82, step: 66, count: 7, top: 8, bottom: 306 };
 const FELL = 232;

@@ -1,13 +1,11 @@
 /** Two edges: a turn that touches the last end, and one that draws it in. */
-import type { Figure } from '../figure.ts';
-import { guide, handWay, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { layStrand, toPath, tube } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { trail } from '../kit/trail.ts';
-import { WARP_WIDTH, warpColour } from '../kit/warp.ts';
-import { techniqueColour } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { guide, handWay, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, toPath, tube, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { WARP_WIDTH, warpColour } from '#core/craft/figures/kit/warp.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const ROWS = 9;
 const PITCH = 17;

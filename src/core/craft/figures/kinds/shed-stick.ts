@@ -1,14 +1,14 @@
 /** The shed stick seen from the side: flat it lies in the warp, on edge it lifts every second end and opens the shed. */
-import type { Figure } from '../figure.ts';
-import { handWay, pointer, wood, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { eased, stages } from '../kit/stages.ts';
-import { toPath, tube } from '../kit/strand.ts';
-import { STICK, flat } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { WARP_WIDTH, warpColour } from '../kit/warp.ts';
-import { num } from '../../cloth/markup.ts';
-import { techniqueColour } from '../yarns.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, pointer, wood, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { eased, stages } from '#core/craft/figures/kit/stages.ts';
+import { toPath, tube } from '#core/craft/figures/kit/strand.ts';
+import { STICK, flat } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { WARP_WIDTH, warpColour } from '#core/craft/figures/kit/warp.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const Y = 138;
 const STICK_X = 330;

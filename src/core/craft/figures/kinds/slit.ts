@@ -1,12 +1,11 @@
 /** A slit: two colours that turn on neighbouring ends leave an opening between them. */
-import type { Figure } from '../figure.ts';
-import { measureBeside, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { lengthWords } from '../length-words.ts';
-import { shapeColours } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { measureBeside, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { shapeColours } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 64, step: 52, count: 9, top: 8, bottom: 250 };
 const PITCH = 18;

@@ -1,17 +1,15 @@
 /** Soumak: forward over some ends, back under fewer, each stitch leaning like the one before; the row back leans the other way. */
-import type { Figure, FigureInput } from '../figure.ts';
-import { measure, words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { needleAt } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { endX, layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { shade } from '../../cloth/colour.ts';
-import { countWords } from '../length-words.ts';
-import { bandOf, roleColour, techniqueColour } from '../yarns.ts';
+import { shade } from '#core/craft/cloth/colour.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { measure, words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { needleAt } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { countWords } from '#core/craft/figures/length-words.ts';
+import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 52, step: 38, count: 13, top: 8, bottom: 262 };
 const FIRST_ROW = 170;

@@ -1,17 +1,14 @@
 /** The spacer card: woven in like a broad row, pushed down to the nails, with the spacing row twined along its upper edge. */
-import type { Figure } from '../figure.ts';
-import { handWay, measure, nail, wood, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { eased, stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { CARD, flat } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { endX, layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { num } from '../../cloth/markup.ts';
-import { lengthWords } from '../length-words.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, measure, nail, wood, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { eased, stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { CARD, flat } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
 
 const WARP: WarpLines = { x: 120, step: 40, count: 9, top: 10, bottom: 240 };
 const CARD_HEIGHT = 76;

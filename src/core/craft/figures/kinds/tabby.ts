@@ -1,14 +1,13 @@
 /** Tabby: over one, under the next, the row after it the other way about, each row laid in hills and then pressed down. */
-import type { Figure } from '../figure.ts';
-import { handWay, words } from '../kit/marks.ts';
-import { rowRuns } from '../kit/rows.ts';
-import { layStrand } from '../kit/strand.ts';
-import { needleAt } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { lengthWords } from '../length-words.ts';
-import { techniqueColour } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { handWay, words } from '#core/craft/figures/kit/marks.ts';
+import { rowRuns } from '#core/craft/figures/kit/rows.ts';
+import { layStrand } from '#core/craft/figures/kit/strand.ts';
+import { needleAt } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { techniqueColour } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 72, step: 46, count: 9, top: 12, bottom: 258 };
 const PITCH = 19;

@@ -1,12 +1,11 @@
 /** Winding the warp: one thread round the nails of both rails, by zigzag or along two neighbouring nails. */
-import { countWords, lengthWords } from '../length-words.ts';
-import type { Figure, FigureInput } from '../figure.ts';
-import { handWay, measureBeside, nail, wood, words } from '../kit/marks.ts';
-import { LEVEL } from '../kit/scene.ts';
-import type { Scene } from '../kit/scene.ts';
-import { layStrand, toPath, tube } from '../kit/strand.ts';
-import { Trail, trail } from '../kit/trail.ts';
-import { WARP_WIDTH, warpColour } from '../kit/warp.ts';
+import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { handWay, measureBeside, nail, wood, words } from '#core/craft/figures/kit/marks.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, toPath, tube } from '#core/craft/figures/kit/strand.ts';
+import { Trail, trail } from '#core/craft/figures/kit/trail.ts';
+import { WARP_WIDTH, warpColour } from '#core/craft/figures/kit/warp.ts';
+import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 
 const NAILS = 7;
 /** Nails wound when the movement is done; the rest show where it goes on. */

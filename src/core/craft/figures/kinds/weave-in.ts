@@ -1,16 +1,14 @@
 /** Running a tail in at the back: up beside one end, under four rows, and cut. */
-import type { Figure } from '../figure.ts';
-import { words } from '../kit/marks.ts';
-import { layField } from '../kit/rows.ts';
-import { LEVEL } from '../kit/scene.ts';
-import { stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import type { Run } from '../kit/strand.ts';
-import { cutMark, needleAt } from '../kit/tools.ts';
-import { trail } from '../kit/trail.ts';
-import { endX, layWarp, warpColour } from '../kit/warp.ts';
-import type { WarpLines } from '../kit/warp.ts';
-import { shapeColours } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { words } from '#core/craft/figures/kit/marks.ts';
+import { layField } from '#core/craft/figures/kit/rows.ts';
+import { LEVEL } from '#core/craft/figures/kit/scene.ts';
+import { stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { cutMark, needleAt } from '#core/craft/figures/kit/tools.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { shapeColours } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 76, step: 51, count: 9, top: 8, bottom: 256 };
 const PITCH = 24;

@@ -1,14 +1,13 @@
 /** Wedges: what narrows as it rises is woven first; what widens fills the valley afterwards. */
-import type { Figure } from '../figure.ts';
-import { numeral, words } from '../kit/marks.ts';
-import { rowRuns } from '../kit/rows.ts';
-import type { Scene } from '../kit/scene.ts';
-import { stages } from '../kit/stages.ts';
-import { layStrand } from '../kit/strand.ts';
-import { needleAt } from '../kit/tools.ts';
-import { layWarp, warpColour } from '../kit/warp.ts';
-import type { Pick, WarpLines } from '../kit/warp.ts';
-import { shapeColours } from '../yarns.ts';
+import type { Figure } from '#core/craft/figures/figure.ts';
+import { numeral, words } from '#core/craft/figures/kit/marks.ts';
+import { rowRuns } from '#core/craft/figures/kit/rows.ts';
+import type { Scene } from '#core/craft/figures/kit/scene.ts';
+import { stages } from '#core/craft/figures/kit/stages.ts';
+import { layStrand } from '#core/craft/figures/kit/strand.ts';
+import { needleAt } from '#core/craft/figures/kit/tools.ts';
+import { layWarp, warpColour, type Pick, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { shapeColours } from '#core/craft/figures/yarns.ts';
 
 const WARP: WarpLines = { x: 54, step: 37.5, count: 13, top: 8, bottom: 262 };
 const PITCH = 16.5;

@@ -1,10 +1,8 @@
 /** What stands round the threads of a figure: wood and nails, measures, words, and the way of the hand. */
-import { escapeWords, num } from '../../cloth/markup.ts';
-import { LEVEL } from './scene.ts';
-import type { Scene } from './scene.ts';
-import { toPath } from './strand.ts';
-import { cutAt, heading, lengthOf } from './trail.ts';
-import type { Point } from './trail.ts';
+import { escapeWords, num } from '#core/craft/cloth/markup.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { toPath } from '#core/craft/figures/kit/strand.ts';
+import { cutAt, heading, lengthOf, type Point } from '#core/craft/figures/kit/trail.ts';
 
 const INK = '#111e33';
 const HAND = '#2b5283';

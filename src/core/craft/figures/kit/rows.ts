@@ -1,11 +1,8 @@
 /** Rows that follow each other with one thread, turning round the last end each time. */
-import { LEVEL } from './scene.ts';
-import type { Scene } from './scene.ts';
-import { layStrand } from './strand.ts';
-import type { Run, Tip } from './strand.ts';
-import { trail } from './trail.ts';
-import { pickRuns } from './warp.ts';
-import type { Pick, WarpLines } from './warp.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { layStrand, type Run, type Tip } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
+import { pickRuns, type Pick, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 
 /** The runs of several rows and of the turns between them. Each row must begin at the side where the one before it ended. */
 export function rowRuns(warp: WarpLines, picks: readonly Pick[]): Run[] {

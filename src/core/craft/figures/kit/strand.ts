@@ -2,10 +2,9 @@
  * Threads as outlined double lines. A strand is a run of stretches at different levels, so that it can go under one end and
  * over the next, and it can stop anywhere along its way.
  */
-import { num } from '../../cloth/markup.ts';
-import type { Scene } from './scene.ts';
-import { cutAt, heading, lengthOf } from './trail.ts';
-import type { Point } from './trail.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { Scene } from '#core/craft/figures/kit/scene.ts';
+import { cutAt, heading, lengthOf, type Point } from '#core/craft/figures/kit/trail.ts';
 
 export interface Run {
   readonly level: number;

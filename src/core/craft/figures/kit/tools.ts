@@ -1,8 +1,7 @@
 /** The few tools a figure shows: needle, flat stick, card, scissors' cut. */
-import { num } from '../../cloth/markup.ts';
-import { LEVEL } from './scene.ts';
-import type { Scene } from './scene.ts';
-import type { Tip } from './strand.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import type { Tip } from '#core/craft/figures/kit/strand.ts';
 
 /** A blunt needle at the tip of a thread that is on its way. */
 export function needleAt(scene: Scene, tip: Tip | undefined): void {

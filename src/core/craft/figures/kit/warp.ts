@@ -1,12 +1,10 @@
 /** The warp of a figure: evenly spaced ends that stand still while the weft moves. */
-import { num } from '../../cloth/markup.ts';
-import type { FigureInput } from '../figure.ts';
-import { yarnColour } from '../../cloth/colour.ts';
-import { LEVEL } from './scene.ts';
-import type { Scene } from './scene.ts';
-import { tube } from './strand.ts';
-import type { Run } from './strand.ts';
-import { trail } from './trail.ts';
+import { yarnColour } from '#core/craft/cloth/colour.ts';
+import { num } from '#core/craft/cloth/markup.ts';
+import type { FigureInput } from '#core/craft/figures/figure.ts';
+import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
+import { tube, type Run } from '#core/craft/figures/kit/strand.ts';
+import { trail } from '#core/craft/figures/kit/trail.ts';
 
 export interface WarpLines {
   /** Left-most end. */
