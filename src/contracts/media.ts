@@ -1,4 +1,7 @@
 /** Files of people as data. */
+import type { Chapter, Cue } from '#core/captions/cues.ts';
+
+export type { Chapter, Cue } from '#core/captions/cues.ts';
 
 export interface MediaFile {
   /** Where the file lies, relative to the uploads folder. */
@@ -11,17 +14,6 @@ export interface MediaFile {
 
 /** Renditions by name: photos have `large` and `thumb`; videos `video`, `captions` and `poster`. */
 export type MediaFiles = Readonly<Record<string, MediaFile>>;
-
-export interface Chapter {
-  readonly atMs: number;
-  readonly title: string;
-}
-
-export interface Cue {
-  readonly fromMs: number;
-  readonly toMs: number;
-  readonly words: string;
-}
 
 /** What is told of a file besides its bytes: `alt` of a picture, chapters and cues of a video. */
 export interface MediaDetail {

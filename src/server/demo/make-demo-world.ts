@@ -3,7 +3,9 @@ import { actingAs } from '#server/demo/acting-as.ts';
 import { makePeople } from '#server/demo/people.ts';
 import { bringMaudToPartTwo, giveSeat } from '#server/demo/progress.ts';
 import { bringIn } from '#server/demo/series.ts';
+import { drawVideos } from '#server/demo/videos.ts';
 import { User } from '#server/models/index.ts';
+import { services } from '#server/services.ts';
 import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 
 /** @returns false when somebody lives here already. */
@@ -21,6 +23,8 @@ export async function makeDemoWorld(password: string, say: (line: string) => voi
   const lowTide = await bringIn(ilse, saltmarsh, 'low-tide');
   await bringIn(person('teodor@cordage.example'), cordage, 'three-knotted-cords');
   say('series');
+  await drawVideos(services().media, lowTide, ilse.id);
+  say('films');
   await publishSeries(await actingAs(ilse), lowTide.slug);
   const maudsSeat = await giveSeat(person('maud@weavers.example'), lowTide, 9, now);
   await giveSeat(person('jonas@weavers.example'), lowTide, 2, now);

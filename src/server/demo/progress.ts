@@ -15,7 +15,7 @@ import { setTick } from '#server/use-cases/progress/set-tick.ts';
 const DAY_MS = 86_400_000;
 
 /** Narrower than the pattern, on a small frame with nails at 8 mm worked in pairs. */
-const MAUDS_PIECE: MyPiece = { loom: { insideWidthMm: 360, insideHeightMm: 600, nailPitchMm: 8 }, widthMm: 300, endsTogether: 2 };
+const MAUDS_PIECE: MyPiece = { loom: { insideWidthMm: 360, insideHeightMm: 640, nailPitchMm: 8 }, widthMm: 300, endsTogether: 2 };
 
 export async function giveSeat(student: User, series: Series, daysAgo: number, now: Date): Promise<Enrolment> {
   return Enrolment.create({ userId: student.id, seriesId: series.id, source: 'granted', startedAt: new Date(now.getTime() - daysAgo * DAY_MS) });
