@@ -46,14 +46,35 @@ async function stream(request: IncomingMessage, response: ServerResponse, root: 
     return;
   }
   if (!response.hasHeader('etag')) response.setHeader('ETag', strongTag(file));
-  // A weak tag may not vouch for the bytes of a part (RFC 9110 section 13.1.5).
-  if (String(request.headers['if-range'] ?? '').trimStart().startsWith('W/')) delete request.headers.range;
+  setRange(request, file.size);
   send(request, `/${key}`, { root, etag: false, cacheControl: false, dotfiles: 'deny', index: false })
     .on('error', (error: unknown) => {
       const { status, headers } = refusalOf(error);
       fail(request, response, status, headers);
     })
     .pipe(response);
+}
+
+/** Leaves `send` only such a Range header as it reads in the same way as RFC 9110; without one it sends the whole file. */
+function setRange(request: IncomingMessage, size: number): void {
+  // A weak tag may not vouch for the bytes of a part (section 13.1.5).
+  const isVouchedFor = !String(request.headers['if-range'] ?? '').trimStart().startsWith('W/');
+  const range = isVouchedFor ? singleRange(request.headers.range, size) : undefined;
+  if (range === undefined) delete request.headers.range;
+  else request.headers.range = range;
+}
+
+/**
+ * The one range that `header` asks for, or undefined when it asks for several or for nothing that can be read.
+ * A last part longer than the file is the whole file (section 14.1.2).
+ */
+export function singleRange(header: string | undefined, size: number): string | undefined {
+  const asked = /^bytes=(?:(\d+)-(\d*)|-(\d+))$/i.exec(header ?? '');
+  if (asked === null) return undefined;
+  const [, first, last, suffix] = asked;
+  if (suffix !== undefined) return `bytes=-${Math.min(Number(suffix), size)}`;
+  if (last !== '' && Number(last) < Number(first)) return undefined;
+  return `bytes=${first ?? ''}-${last ?? ''}`;
 }
 
 async function fileAt(name: string): Promise<Stats | undefined> {

@@ -1,6 +1,7 @@
 /** Headers that every answer carries, whoever wrote it: pages, files, refusals, 304 and 500 alike. */
 import type { Handler } from '#server/web/front/handler.ts';
 import { gateOf } from '#server/web/front/response-gate.ts';
+import { SEND_HEADER } from '#server/web/send-file.ts';
 
 export const SECURITY_HEADERS: Readonly<Record<string, string>> = {
   // Browsers heed it over https only; a proxy may reach us by plain http, so it is always there.
@@ -23,9 +24,12 @@ export function securityHeaders(fallbackPolicy: boolean): Handler {
     for (const [name, value] of Object.entries(SECURITY_HEADERS)) response.setHeader(name, value);
     gateOf(response).beforeHead((head) => {
       head.removeHeader('X-Powered-By');
+      if (head.statusCode >= 400 && !head.hasHeader('cache-control')) head.setHeader('Cache-Control', 'no-store');
       const type = String(head.getHeader('content-type') ?? '');
       const isPage = /^text\/html\b/i.test(type);
       if (isPage && !/charset=/i.test(type)) head.setHeader('Content-Type', 'text/html; charset=utf-8');
+      // A file of a person brings a stricter policy when it is sent.
+      if (head.hasHeader(SEND_HEADER)) return undefined;
       if (fallbackPolicy && !head.hasHeader('content-security-policy')) head.setHeader('Content-Security-Policy', isPage ? PAGE_POLICY : FILE_POLICY);
       return undefined;
     });
