@@ -38,14 +38,8 @@ beforeAll(async () => {
 });
 
 beforeEach(async () => {
-  const { sequelize } = await import('#server/db/sequelize.ts');
-  const tables = Object.values(sequelize.models).map((model) => model.getTableName());
-  await sequelize.transaction(async () => {
-    await sequelize.query('SET FOREIGN_KEY_CHECKS = 0');
-    for (const table of [...tables, 'rate_windows']) await sequelize.query(`DELETE FROM ${String(table)}`);
-    await sequelize.query('UPDATE receipt_counters SET last_number = 0');
-    await sequelize.query('SET FOREIGN_KEY_CHECKS = 1');
-  });
+  const { emptyAllTables } = await import('#server/db/empty-tables.ts');
+  await emptyAllTables();
 });
 
 afterAll(async () => {

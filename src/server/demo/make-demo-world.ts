@@ -1,16 +1,22 @@
 /** The demo world, made once into an empty database, through the same use-cases as any other. */
+import { emptyAllTables } from '#server/db/empty-tables.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
-import { makePeople } from '#server/demo/people.ts';
+import { makePeople, makeSteward, whoLivesHere } from '#server/demo/people.ts';
 import { bringMaudToPartTwo, giveSeat } from '#server/demo/progress.ts';
 import { bringIn } from '#server/demo/series.ts';
 import { drawVideos } from '#server/demo/videos.ts';
-import { User } from '#server/models/index.ts';
+import type { User } from '#server/models/index.ts';
 import { services } from '#server/services.ts';
 import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 
 /** @returns false when somebody lives here already. */
 export async function makeDemoWorld(password: string, say: (line: string) => void): Promise<boolean> {
-  if ((await User.count()) > 0) return false;
+  const here = await whoLivesHere();
+  if (here === 'somebody') return false;
+  if (here === 'half') {
+    say('clearing away a demo world that was cut off');
+    await emptyAllTables();
+  }
   const now = new Date();
   const { users, saltmarsh, cordage } = await makePeople(password, now);
   const person = (address: string): User => {
@@ -29,6 +35,7 @@ export async function makeDemoWorld(password: string, say: (line: string) => voi
   const maudsSeat = await giveSeat(person('maud@weavers.example'), lowTide, 9, now);
   await giveSeat(person('jonas@weavers.example'), lowTide, 2, now);
   await bringMaudToPartTwo(person('maud@weavers.example'), lowTide, maudsSeat);
+  await makeSteward(password, now);
   say('students');
   return true;
 }

@@ -25,21 +25,12 @@ export interface DemoFolk {
   readonly cordage: Workroom;
 }
 
+/** Made last, so that her being there says that everything else is. */
+const STEWARD = 'pell@office.example';
+
 export async function makePeople(password: string, now: Date): Promise<DemoFolk> {
   const users = new Map<string, User>();
-  for (const { address, name } of DEMO_PEOPLE) {
-    const parsed = parseMailAddress(address);
-    if (!parsed.ok) throw new RangeError(address);
-    users.set(address, await User.create({
-      email: parsed.value.address,
-      emailKey: parsed.value.key,
-      name,
-      passwordHash: await hashPassword(password),
-      emailConfirmedAt: now,
-      timeZone: 'Europe/Berlin',
-      isSteward: address === 'pell@office.example',
-    }));
-  }
+  for (const person of DEMO_PEOPLE) if (person.address !== STEWARD) users.set(person.address, await makePerson(person, password, now));
   const idOf = (address: string): number => users.get(address)?.id ?? 0;
   const saltmarsh = await Workroom.create({
     ownerId: idOf('ilse@saltmarsh.example'),
@@ -57,4 +48,32 @@ export async function makePeople(password: string, now: Date): Promise<DemoFolk>
   });
   await WorkroomHelper.create({ workroomId: saltmarsh.id, userId: idOf('wren@saltmarsh.example') });
   return { users, saltmarsh, cordage };
+}
+
+async function makePerson({ address, name }: DemoPerson, password: string, now: Date): Promise<User> {
+  const parsed = parseMailAddress(address);
+  if (!parsed.ok) throw new RangeError(address);
+  return User.create({
+    email: parsed.value.address,
+    emailKey: parsed.value.key,
+    name,
+    passwordHash: await hashPassword(password),
+    emailConfirmedAt: now,
+    timeZone: 'Europe/Berlin',
+    isSteward: address === STEWARD,
+  });
+}
+
+export async function makeSteward(password: string, now: Date): Promise<void> {
+  const steward = DEMO_PEOPLE.find(({ address }) => address === STEWARD);
+  if (steward !== undefined) await makePerson(steward, password, now);
+}
+
+/** `none`: nobody is here. `half`: a demo world whose making was cut off, and nobody else. */
+export async function whoLivesHere(): Promise<'none' | 'half' | 'somebody'> {
+  const users = await User.findAll({ attributes: ['email'], limit: DEMO_PEOPLE.length + 1 });
+  if (users.length === 0) return 'none';
+  const demo = new Set(DEMO_PEOPLE.map(({ address }) => address));
+  const half = users.every(({ email }) => demo.has(email)) && !users.some(({ email }) => email === STEWARD);
+  return half ? 'half' : 'somebody';
 }
