@@ -7,29 +7,37 @@ import type { Cord, CordPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { light, shade } from '#core/craft/cloth/colour.ts';
 import { moved, num, ROUND, type PathStore } from '#core/craft/cloth/markup.ts';
 
-/** @param height pixels from the dowel to the ends of the loose cord */
-export function drawCords(piece: CordPiece, width: number, height: number, pxPerMm: number, paths: PathStore): string {
+interface CordRoom {
+  readonly width: number;
+  /** Pixels from below the dowel to the ends of the loose cord. */
+  readonly height: number;
+  /** How far the cords reach up, round the dowel. */
+  readonly rise: number;
+  readonly pxPerMm: number;
+}
+
+export function drawCords(piece: CordPiece, { width, height, rise, pxPerMm }: CordRoom, paths: PathStore): string {
   const room = width / Math.max(1, piece.cords.length);
   return piece.cords
     .map((cord, index) => {
       const wide = Math.min(room * 0.84, cord.widthMm * pxPerMm);
-      return drawCord(cord, room * (index + 0.5), wide, height, chanceFrom(piece.seed * 31 + index), paths);
+      return drawCord(cord, room * (index + 0.5), wide, { height, rise }, chanceFrom(piece.seed * 31 + index), paths);
     })
     .join('');
 }
 
-function drawCord(cord: Cord, x: number, wide: number, height: number, chance: () => number, paths: PathStore): string {
+function drawCord(cord: Cord, x: number, wide: number, { height, rise }: Pick<CordRoom, 'height' | 'rise'>, chance: () => number, paths: PathStore): string {
   const thick = wide * 0.2;
   const step = thick * 1.5;
   const end = height * cord.knotted;
-  const still = [-0.1, 0.1].map((off) => `M${num(x + off * wide)} 0V${num(end)}`).join('');
+  const still = [-0.1, 0.1].map((off) => `M${num(x + off * wide)} ${num(-rise)}V${num(end)}`).join('');
   const knots = knotPaths(cord, x, wide, step, end);
   const tail = tailPath(x, wide, end - step * 2, height, chance);
   const c = cord.colour;
   const body = (d: string, dark: number, width: number): string => paths.stroke(d, shade(c, dark), width, ROUND);
   return (
     body(tail, 0.35, Math.max(1, thick * 0.34)) + body(tail, 0, Math.max(0.7, thick * 0.2)) +
-    paths.stroke(still, shade(c, 0.5), thick * 1.1) + paths.stroke(still, shade(c, 0.12), thick * 0.74) +
+    body(still, 0.5, thick * 1.1) + body(still, 0.12, thick * 0.74) +
     body(knots.bumps, 0.5, thick * 0.9) + body(knots.bumps, 0.08, thick * 0.62) +
     knots.bars
       .map((d) => paths.stroke(d, shade(c, 0.52), thick * 1.18, ROUND + moved(0, thick * 0.14)) + body(d, 0, thick * 0.9) +

@@ -181,7 +181,7 @@ function hangCords(piece: CordPiece, view: ClothView): Picture {
   const top = Math.max(14, view.width * 0.12);
   const height = view.height ?? piece.lengthMm * scale;
   const paths = new PathStore(view.id);
-  const cords = drawCords(piece, view.width - 2 * inset, height, scale, paths);
+  const cords = drawCords(piece, { width: view.width - 2 * inset, height, rise: top * 0.3, pxPerMm: scale }, paths);
   const body = drawDowel(view.width, inset * 0.1, top) + `<g transform="translate(${num(inset)} ${num(top)})">${cords}</g>`;
   return { width: view.width, height: height + top, body, defs: paths.defs() };
 }

@@ -44,14 +44,21 @@ export function layBands(piece: WovenPiece, scale: number, woven: number, weave:
   const clip = cut === undefined ? '' : clipPath(cut, weave);
   const pieces = order.map((item) => drawLaid(item, item === cut, weave));
   const edges = hems.map((hem) => drawHem(hem, height, weave));
-  /* The first edge lies under the pile of the bands above it, the last edge over everything. */
-  const first = hems.findIndex((hem) => hem.cloth === 'after');
-  const under = first >= 0 && weave.begin === 'foot' ? 1 : 0;
-  const markup =
-    pieces.slice(0, under).join('') + (under === 1 ? (edges[first] ?? '') : '') + pieces.slice(under).join('') +
-    edges.filter((_, index) => !(under === 1 && index === first)).join('');
+  const markup = withEdges(pieces, edges, hems, order[0]?.band, weave);
   const fell = weave.begin === 'head' ? woven * height : height - woven * height;
   return { markup, clip, height, fell };
+}
+
+/**
+ * The first edge is sewn into the band above it and lies under the pile of all that follow; the last edge lies over
+ * everything. Bands and edges come with the lowest on the screen first.
+ */
+function withEdges(bands: readonly string[], edges: readonly string[], hems: readonly Hem[], lowest: LaidBand | undefined, weave: Weave): string {
+  const first = weave.begin === 'foot' ? hems.findIndex((hem) => hem.cloth === 'after') : -1;
+  if (first < 0) return bands.join('') + edges.join('');
+  const before = lowest?.technique === 'rya' ? 0 : 1;
+  const others = edges.filter((_, index) => index !== first);
+  return [...bands.slice(0, before), edges[first], ...bands.slice(before), ...others].join('');
 }
 
 function place(piece: WovenPiece, scale: number, height: number, wovenPx: number, weave: Weave): { laid: Laid[]; hems: Hem[] } {

@@ -58,7 +58,7 @@ describe('a cloth from a described piece and its plan', () => {
     const { colour: _colour, ...water } = LOW_TIDE.yarns['water'] ?? { tex: 400 };
     const own = clothOf({ ...LOW_TIDE, yarns: { ...LOW_TIDE.yarns, water } });
     expect(band(own, 'sky').colour).toBe(NEUTRAL);
-    expect(own.loom).toEqual({ insideWidthMm: 500, insideHeightMm: 640, bottomMm: 100 });
+    expect(own.loom).toEqual({ insideWidthMm: 500, insideHeightMm: 640, bottomMm: 90 });
   });
 
   it('stays within the budget at every size it stands in a page', () => {
