@@ -1,0 +1,81 @@
+/** Whether a pattern fits the loom somebody typed, what it would be there, and if not, why not and what would. */
+import { roomOnLoom, fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import { changePiece } from '#core/craft/fitting/change-piece.ts';
+import { lengthOf } from '#core/craft/amounts/amount-types.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import type { Problem } from '#core/outcome.ts';
+import { amountText } from '#core/units/format-amount.ts';
+import { MM_PER_INCH } from '#core/units/inches.ts';
+import type { Units } from '#core/units/units.ts';
+import { readTypedLoom, type LoomFaults, type TypedLoom } from './typed-loom.ts';
+
+export type Trial =
+  /** Something typed cannot be used. */
+  | { readonly ok: false; readonly fields: LoomFaults }
+  | { readonly ok: true; readonly fits: true; readonly mine: MyPiece; readonly fitted: FittedPiece; readonly warnings: readonly Problem[]; readonly freeMm: number; readonly narrowed: boolean }
+  /** `widestMm` fits at this spacing; null when nothing worth weaving does. */
+  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widestMm: number | null };
+
+/** Narrower than this nobody would call it the same piece. */
+const LEAST_WIDTH_MM = 80;
+/** The engine's own limit: a loom on which any pattern has room. */
+const BOUNDLESS_MM = 20_000;
+const STEPS = 12;
+
+const stepMm = (units: Units): number => (units === 'in' ? MM_PER_INCH / 4 : 5);
+
+/**
+ * Tries `pattern` on the loom that was typed. `title` is how the piece is spoken of. Every sentence is in the person's
+ * units and says what would work.
+ */
+export function tryOnLoom(pattern: Piece, title: string, typed: TypedLoom): Trial {
+  const read = readTypedLoom(typed);
+  if (!read.ok) return { ok: false, fields: read.fields };
+  const { units, ends } = typed;
+  const onLoom: MyPiece = { loom: read.loom, endsTogether: ends };
+  const asPattern = fitPiece(pattern, onLoom, units);
+  if (asPattern.ok) return fitting(onLoom, asPattern.value, asPattern.warnings, read.loom.insideWidthMm, false);
+  if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), widestMm: null };
+  const widest = widestThatFits(pattern, onLoom, units);
+  if (typed.narrower && widest !== null) return fitting(widest.mine, widest.fitted, widest.warnings, read.loom.insideWidthMm, true);
+  return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.widthMm ?? null), widestMm: widest?.widthMm ?? null };
+}
+
+function fitting(mine: MyPiece, fitted: FittedPiece, warnings: readonly Problem[], insideWidthMm: number, narrowed: boolean): Trial {
+  const once = [...new Map(warnings.map((warning) => [warning.message, warning])).values()];
+  return { ok: true, fits: true, mine, fitted, warnings: once, freeMm: (insideWidthMm - fitted.plan.ends.woundWidthMm) / 2, narrowed };
+}
+
+const isTooWide = (problems: readonly Problem[]): boolean => problems.every(({ code, path }) => code === 'E_FIT' && path === '/loom/insideWidthMm');
+const sentences = (problems: readonly Problem[]): string => [...new Set(problems.map(({ message }) => message))].join(' ');
+
+interface Widest {
+  readonly widthMm: number;
+  readonly mine: MyPiece;
+  readonly fitted: FittedPiece;
+  readonly warnings: readonly Problem[];
+}
+
+/** The room is reckoned before the number of ends is made even, so the first width may be a step too wide. */
+function widestThatFits(pattern: Piece, onLoom: MyPiece, units: Units): Widest | null {
+  const room = roomOnLoom(changePiece(pattern, onLoom)).widthMm;
+  if (room === undefined) return null;
+  const step = stepMm(units);
+  const widest = Math.floor(room / step);
+  for (let steps = widest; steps > widest - STEPS && steps * step >= LEAST_WIDTH_MM; steps -= 1) {
+    const mine: MyPiece = { ...onLoom, widthMm: steps * step };
+    const fit = fitPiece(pattern, mine, units);
+    if (fit.ok) return { widthMm: steps * step, mine, fitted: fit.value, warnings: fit.warnings };
+  }
+  return null;
+}
+
+function tooWide(pattern: Piece, title: string, onLoom: MyPiece, units: Units, widestMm: number | null): string {
+  const size = (mm: number): string => amountText(lengthOf(mm, 'size'), units);
+  const inside = onLoom.loom?.insideWidthMm ?? 0;
+  const pitch = onLoom.loom?.nailPitchMm ?? 0;
+  const onAny = fitPiece(pattern, { ...onLoom, loom: { ...onLoom.loom, insideWidthMm: BOUNDLESS_MM } }, units);
+  const needs = onAny.ok ? ` ${title} needs ${amountText(lengthOf(onAny.value.plan.loom.insideWidthNeededMm, 'least'), units)}.` : '';
+  const so = widestMm === null ? ' It is too narrow for this piece.' : ` With nails at ${amountText(lengthOf(pitch, 'fine'), units)} it would be ${size(widestMm)} wide.`;
+  return `Your loom is ${size(inside)} inside.${needs}${so}`;
+}
