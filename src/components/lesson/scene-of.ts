@@ -1,5 +1,5 @@
 // Puts a scene together from what a page has fetched: a piece with its plan, the media of the series, the ticks.
-import type { MediaDetail, MediaFiles } from '#contracts/media.ts';
+import type { SeriesMediaFile } from '#contracts/media.ts';
 import { amountOf } from '#core/craft/amounts.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { Piece } from '#core/craft/piece.ts';
@@ -8,17 +8,6 @@ import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import type { LessonScene, SceneAmount, SceneFigure, ScenePicture, SceneVideo, StepForm } from './scene.ts';
-
-/** A picture or video of a series that is ready to be shown. */
-export interface SeriesMediaFile {
-  readonly kind: 'picture' | 'video';
-  /** Its name in the series. */
-  readonly name: string;
-  readonly title: string;
-  readonly publicId: string;
-  readonly files: MediaFiles;
-  readonly detail: MediaDetail;
-}
 
 export interface SceneSources {
   readonly facts: LessonFacts;

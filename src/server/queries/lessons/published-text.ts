@@ -1,7 +1,10 @@
 /** A published text by the id of its version. Versions never change, so what was read once is kept. */
-import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
+import { factsOf, type LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import type { LessonTree } from '#core/lesson-text/tree.ts';
-import { LessonVersion } from '#server/models/index.ts';
+import { treeIsValid } from '#core/lesson-text/tree-is-valid.ts';
+import { AppError } from '#server/errors.ts';
+import { readLessonText } from '#server/lesson-text/parse-pool.ts';
+import { Lesson, LessonVersion } from '#server/models/index.ts';
 
 export interface PublishedText {
   readonly versionId: number;
@@ -12,14 +15,31 @@ export interface PublishedText {
 const MOST_KEPT = 200;
 const kept = new Map<number, PublishedText>();
 
+/** @returns null when there is no such version. Whether somebody may read it is for the caller to ask first. */
 export async function publishedText(versionId: number): Promise<PublishedText | null> {
   const before = kept.get(versionId);
   if (before !== undefined) return before;
   const version = await LessonVersion.findByPk(versionId);
   if (version === null) return null;
-  const text = { versionId, tree: version.tree, facts: version.facts };
+  const stored: unknown = version.tree;
+  const tree = treeIsValid(stored) ? stored : await treeAnew(version);
+  const text = { versionId, tree, facts: factsOf(tree) };
   const [oldest] = kept.keys();
   if (kept.size >= MOST_KEPT && oldest !== undefined) kept.delete(oldest);
   kept.set(versionId, text);
   return text;
+}
+
+/** The published texts of a series, in the order of its parts. */
+export async function publishedTexts(seriesId: number): Promise<PublishedText[]> {
+  const lessons = await Lesson.findAll({ where: { seriesId, takenOutAt: null }, attributes: ['publishedVersionId'], order: ['position', 'id'] });
+  const versionIds = lessons.map(({ publishedVersionId }) => publishedVersionId).filter((id) => id !== null);
+  return (await Promise.all(versionIds.map(publishedText))).filter((text) => text !== null);
+}
+
+/** The tree was kept by another version of the program; its source still says what it means. */
+async function treeAnew({ id, source }: LessonVersion): Promise<LessonTree> {
+  const reading = await readLessonText(source);
+  if (!reading.ok) throw new AppError('BUG', { message: `Lesson version ${String(id)} can no longer be read: ${reading.problems[0]?.reason ?? ''}` });
+  return reading.tree;
 }
