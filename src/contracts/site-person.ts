@@ -8,6 +8,8 @@ export interface SitePerson {
   /** Her own choice of day or evening; absent or null: the system's wish. */
   scheme?: 'light' | 'dark' | null;
   units?: 'cm' | 'in';
+  /** False until she has opened the link in our first letter. */
+  addressConfirmed?: boolean;
   /** Name of the workroom she works in, shown beside the mark inside the workroom. */
   workroom?: string | null;
 }

@@ -8,7 +8,7 @@ export const POST: APIRoute = async ({ locals, cookies, redirect }) => {
   await signOut(locals.ctx);
   cookies.delete(sessionCookie().name, { path: '/' });
   const said = saidCookie();
-  cookies.set(said.name, 'Signed out. Until you sit down again.', said.options);
+  cookies.set(said.name, 'Signed out.', said.options);
   const response = redirect('/sign-in', 303);
   response.headers.set('Clear-Site-Data', '"cache"');
   return response;

@@ -70,6 +70,8 @@ export interface FormState {
   value(name: string, otherwise?: string): string;
   values(name: string, otherwise?: readonly string[]): readonly string[];
   error(name: string): string | undefined;
+  /** Whether `name` is the first field that does not work: it takes the focus, without script. */
+  isFirst(name: string): boolean;
 }
 
 /** What a page needs to draw a form again: `data` is the answer of its action, or undefined when it was not sent. */
@@ -88,5 +90,6 @@ export function formState(data: FormAnswer | undefined): FormState {
       return value === undefined ? [] : typeof value === 'string' ? [value] : value;
     },
     error: (name) => failed?.fields[name],
+    isFirst: (name) => Object.keys(failed?.fields ?? {})[0] === name,
   };
 }
