@@ -2,8 +2,8 @@ import type { Trust } from '#core/craft/amounts.ts';
 
 /** How sure an amount is, by the least certain thing it was made of. */
 export const trustWords: Readonly<Record<Trust, string>> = {
-  measured: 'From what you measured.',
-  label: 'From the label of the yarn.',
-  formula: 'Reckoned from your loom and yarn.',
-  class: 'From a table of usual yarns, so about a fifth more or less.',
+  measured: 'As good as the measuring behind it.',
+  label: 'As good as the label it was read from.',
+  formula: 'Reckoned; the cloth may differ by a few per cent.',
+  class: 'From a table of common yarns. Take it as a guide, and measure when you can.',
 };

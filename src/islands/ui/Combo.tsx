@@ -31,7 +31,7 @@ export function Combo({ name, label, options, value, onChoose, hint, error, form
   const onKeyDown = (event: KeyboardEvent) => {
     if (event.key === 'ArrowDown' || event.key === 'ArrowUp') {
       event.preventDefault();
-      if (!open) return begin();
+      if (!open) { begin(); return; }
       const step = event.key === 'ArrowDown' ? 1 : -1;
       setAt((at + step + matches.length) % Math.max(1, matches.length));
     } else if (event.key === 'Enter' && open) {

@@ -52,7 +52,7 @@ describe('a field', () => {
   });
 
   it('takes lengths as people write them', async () => {
-    const seen = vi.fn();
+    const seen = vi.fn<(typed: string) => void>();
     render(<UnitField name="width" label="Width" unit="in" onChange={(event) => seen(event.currentTarget.value)} />);
     await userEvent.type(screen.getByRole('textbox'), '4 7/8');
     expect(seen).toHaveBeenLastCalledWith('4 7/8');

@@ -14,8 +14,8 @@ const selectors: Record<Scheme, { readonly media: string | null; readonly select
 };
 
 export async function shippedSheet(): Promise<Root> {
-  const { root } = await postcss([tailwind({ ...config, content: [{ raw: '' }] })]).process('@tailwind base;', { from: undefined });
-  return root.type === 'root' ? root : postcss.root();
+  const { css } = await postcss([tailwind({ ...config, content: [{ raw: '' }] })]).process('@tailwind base;', { from: undefined });
+  return postcss.parse(css);
 }
 
 /** All variables that hold in a scheme, with those that hold everywhere. */
