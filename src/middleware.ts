@@ -95,7 +95,8 @@ function appErrorOfAction(error: ActionError | undefined): AppError {
 function withHeaders(response: Response, signedIn: boolean): Response {
   const { payments, publicUrl } = config();
   const payOrigin = payments.url === undefined ? 'https://checkout.stripe.com' : new URL(payments.url, publicUrl).origin;
-  const policy = completePolicy(response.headers.get('content-security-policy'), payOrigin);
+  const isPage = response.headers.get('content-type')?.startsWith('text/html') === true;
+  const policy = isPage ? completePolicy(response.headers.get('content-security-policy'), payOrigin) : null;
   if (policy !== null) response.headers.set('content-security-policy', policy);
   if (!response.headers.has('cache-control')) response.headers.set('cache-control', cacheRule(signedIn));
   return response;

@@ -1,6 +1,7 @@
 /** Every form of the site, by feature. */
+import { bench } from './bench.ts';
 import { checkout } from './checkout.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
 
-export const server = { checkout, office, people };
+export const server = { bench, checkout, office, people };

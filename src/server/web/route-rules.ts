@@ -43,4 +43,5 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/_actions/[...path]': 'public',
   '/_image': 'public',
   '/_server-islands/[name]': 'public',
+  '/workroom/bench': 'bench',
 };
