@@ -1,8 +1,8 @@
 /** The same cloth in words, for whoever does not see it. */
 import { wovenHeightMm, type ClothBand, type ClothPiece, type TabbyBand, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
-
-type Units = 'cm' | 'in';
+import { amountText } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
 
 /**
  * For example: "Low Tide, wall hanging, 40 cm wide. In the order it is woven: a rya fringe in Foam, 4 cm of tabby in
@@ -77,11 +77,7 @@ function rowWords(piece: WovenPiece, reachedMm: number): string {
 }
 
 function length(mm: number, units: Units): string {
-  if (units === 'cm') return mm < 10 ? `${Math.round(mm)} mm` : `${Math.round(mm) / 10} cm`;
-  const quarters = Math.round((mm / 25.4) * 4);
-  const whole = Math.floor(quarters / 4);
-  const rest = ['', '1/4', '1/2', '3/4'][quarters % 4] ?? '';
-  return `${[whole === 0 && rest !== '' ? '' : String(whole), rest].filter((part) => part !== '').join(' ')} in`;
+  return amountText({ kind: 'length', mm, use: mm < 10 ? 'fine' : 'size' }, units);
 }
 
 function counted(count: number, word: string): string {

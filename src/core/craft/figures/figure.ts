@@ -2,7 +2,7 @@
 import type { Scene } from '#core/craft/figures/kit/scene.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan.ts';
-import type { Units } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
 
 export interface FigureInput {
   readonly piece: Piece;

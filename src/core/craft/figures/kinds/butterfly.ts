@@ -29,8 +29,8 @@ export const BUTTERFLY: Figure = {
     for (let i = 0; i < 3; i++) layStrand(scene, { colour, width: 6.5, runs: [{ level: LEVEL.tool + i, points: waist(i) }] }, stageOf(tie, i, 3));
     if (progress < 1) return;
     handWay(scene, trail(LEFT - 60, Y + 92).bend(LEFT - 90, Y + 100, LEFT - 124, Y + 96).points);
-    words(scene, 8, Y + 122, 'draw from here', { size: 15, quiet: true });
-    words(scene, 280, 36, 'tied at the waist', { anchor: 'middle', size: 15, quiet: true });
+    words(scene, 8, Y + 122, 'draw from here', { size: 17, quiet: true });
+    words(scene, 280, 36, 'tied at the waist', { anchor: 'middle', size: 17, quiet: true });
   },
 };
 

@@ -19,7 +19,7 @@ export const CARD_WIDTH: Figure = {
   title: 'Cutting strands on a card',
   height: 266,
   describe: (input) =>
-    `Yarn is wound round a card ${lengthWords(cardMm(input), input.units)} wide and cut along one edge. Every turn becomes one strand of ${lengthWords(cutMm(input), input.units)}.`,
+    `Yarn is wound round a card ${lengthWords(cardMm(input), input.units, 'cut')} wide and cut along one edge. Every turn becomes one strand of ${lengthWords(cutMm(input), input.units, 'cut')}.`,
   draw: (scene, input, progress) => {
     const [wind, cut, open] = stages(progress, [5, 2, 2] as const);
     const colour = techniqueColour(input, 'rya');
@@ -33,13 +33,13 @@ export const CARD_WIDTH: Figure = {
     }
     if (d !== '') scene.add(LEVEL.front, tube(d, colour, 9, ' stroke-linecap="round"'));
     if (cut > 0 && cut < 1) cutMark(scene, LEFT + 24 + cut * (RIGHT - LEFT - 40), BOTTOM + 6);
-    measure(scene, { x: 84, y: TOP }, { x: 84, y: BOTTOM }, lengthWords(cardMm(input), input.units));
-    if (wind >= 1) words(scene, 484, BOTTOM + 5, 'cut along', { size: 15 });
-    if (wind >= 1) words(scene, 484, BOTTOM + 23, 'this edge', { size: 15 });
+    measure(scene, { x: 84, y: TOP }, { x: 84, y: BOTTOM }, lengthWords(cardMm(input), input.units, 'cut'));
+    if (wind >= 1) words(scene, 484, BOTTOM + 5, 'cut along', { size: 17 });
+    if (wind >= 1) words(scene, 484, BOTTOM + 23, 'this edge', { size: 17 });
     if (open > 0) {
       const half = 8 + 190 * eased(open);
       scene.add(LEVEL.front, tube(`M${num(280 - half)} 208H${num(280 + half)}`, colour, 9, ' stroke-linecap="round"'));
-      if (open >= 1) measure(scene, { x: 280 - half, y: 240 }, { x: 280 + half, y: 240 }, lengthWords(cutMm(input), input.units));
+      if (open >= 1) measure(scene, { x: 280 - half, y: 240 }, { x: 280 + half, y: 240 }, lengthWords(cutMm(input), input.units, 'cut'));
     }
   },
 };

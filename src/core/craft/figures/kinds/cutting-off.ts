@@ -41,7 +41,7 @@ export const CUTTING_OFF: Figure = {
       if ((done > 0 && done < 0.35) || (place === CUT && progress >= 1)) cutMark(scene, x(loop), NAIL_Y - 12);
       if (place < CUT && done >= 1) numeral(scene, x(loop), 196, place + 1);
     });
-    if (progress >= 1) words(scene, 280, 280, 'knot before you cut on', { anchor: 'middle', size: 15 });
+    if (progress >= 1) words(scene, 280, 280, 'knot before you cut on', { anchor: 'middle', size: 17 });
   },
 };
 

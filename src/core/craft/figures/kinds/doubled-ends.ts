@@ -16,7 +16,7 @@ export const DOUBLED_ENDS: Figure = {
   title: 'Doubled ends',
   height: 270,
   describe: (input) =>
-    `Two neighbouring ends count as one: the weft goes over two and under two. From one pair to the next is ${lengthWords(pairMm(input), input.units)}.`,
+    `Two neighbouring ends count as one: the weft goes over two and under two. From one pair to the next is ${lengthWords(pairMm(input), input.units, 'fine')}.`,
   draw: (scene, input, progress) => {
     layWarp(scene, WARP, warpColour(input));
     const rows = rowRuns(WARP, [
@@ -32,7 +32,7 @@ export const DOUBLED_ENDS: Figure = {
       words(scene, a + WARP.step / 2, 252, String(pair + 1), { anchor: 'middle' });
     }
     const first = WARP.x + WARP.step / 2;
-    measure(scene, { x: first + WARP.step * 2, y: 32 }, { x: first + WARP.step * 4, y: 32 }, lengthWords(pairMm(input), input.units));
+    measure(scene, { x: first + WARP.step * 2, y: 32 }, { x: first + WARP.step * 4, y: 32 }, lengthWords(pairMm(input), input.units, 'fine'));
   },
 };
 

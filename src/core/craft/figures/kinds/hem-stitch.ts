@@ -37,7 +37,7 @@ export const HEM_STITCH: Figure = {
       numeral(scene, endX(WARP, 6) + 28, STITCH_Y - 22, 1);
       numeral(scene, endX(WARP, 6) + 28, STITCH_Y + 34, 2);
       numeral(scene, endX(WARP, 6) - 30, EDGE_Y - 64, 3);
-      words(scene, 8, 252, '1 behind   2 round   3 behind, and up', { quiet: true, size: 15 });
+      words(scene, 8, 252, '1 behind, 2 round, 3 behind and up', { quiet: true, size: 17 });
     }
   },
 };

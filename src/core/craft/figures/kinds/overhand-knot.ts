@@ -28,10 +28,10 @@ export const OVERHAND_KNOT: Figure = {
     if (ring >= 1) for (const run of runs) scene.add(run.level + 0.5, `<path d="${toPath(run.points)}" stroke="${shade(warp, 0.45)}" stroke-width="1.2"/>`);
     if (push > 0) {
       handWay(scene, trail(396, 212).bend(400, 150, 352, 112).points, push);
-      words(scene, 410, 170, 'push it up', { size: 15 });
-      words(scene, 410, 190, 'before it closes', { size: 15 });
+      words(scene, 410, 170, 'push it up', { size: 17 });
+      words(scene, 410, 190, 'before it closes', { size: 17 });
     }
-    words(scene, 204, 300, 'two ends, taken as one', { anchor: 'end', quiet: true, size: 15 });
+    words(scene, 204, 300, 'two ends, taken as one', { anchor: 'end', quiet: true, size: 17 });
   },
 };
 

@@ -18,7 +18,7 @@ export const ROVING: Figure = {
   height: 250,
   describe: (input) => {
     const { over, bulgeMm } = rovingOf(input);
-    return `Unspun roving goes over ${countWords(over, 'end', 'ends')} and under ${over}, without pulling, and is puffed up to about ${lengthWords(bulgeMm, input.units)} where it lies in front.`;
+    return `Unspun roving goes over ${countWords(over, 'end', 'ends')} and under ${over}, without pulling, and is puffed up to about ${lengthWords(bulgeMm, input.units, 'fine')} where it lies in front.`;
   },
   draw: (scene, input, progress) => {
     const { over, bulgeMm } = rovingOf(input);
@@ -28,7 +28,7 @@ export const ROVING: Figure = {
     if (progress < 1) return;
     words(scene, endX(WARP, (over - 1) / 2), 62, `over ${over}`, { anchor: 'middle', patch: true });
     words(scene, endX(WARP, over + (over - 1) / 2), 62, `under ${over}`, { anchor: 'middle', patch: true });
-    measureBeside(scene, { x: 536, y: Y }, { x: 536, y: Y - 38 }, lengthWords(bulgeMm, input.units), { x: 546, y: Y - 52 }, 'end');
+    measureBeside(scene, { x: 536, y: Y }, { x: 536, y: Y - 38 }, lengthWords(bulgeMm, input.units, 'fine'), { x: 546, y: Y - 52 }, 'end');
   },
 };
 

@@ -25,7 +25,7 @@ export const RYA_KNOT: Figure = {
     const band = bandOf(input, 'rya');
     const cut = bandPlanOf(input, 'rya')?.cutMm;
     const strands = countWords(band?.strands ?? 3, 'strand', 'strands');
-    const long = cut === undefined ? '' : `, each ${lengthWords(cut, input.units)} long`;
+    const long = cut === undefined ? '' : `, each ${lengthWords(cut, input.units, 'cut')} long`;
     return `A bundle of ${strands}${long} is laid over two ends. Each half goes round the outside of its end, behind it, and up between the two. Both are drawn down until the knot sits on the cloth.`;
   },
   draw: (scene, input, progress) => {
@@ -39,7 +39,7 @@ export const RYA_KNOT: Figure = {
     if (left > 0 && left < 1) handWay(scene, trail(300, 62).bend(268, 92, 300, 132).points);
     if (right > 0 && right < 1) handWay(scene, trail(458, 62).bend(490, 92, 458, 132).points);
     if (progress >= 1) handWay(scene, trail(500, 150).to(500, 236).points);
-    if (laid >= 1 && down === 0) words(scene, 379, 40, 'the bridge lies in front', { anchor: 'middle', patch: true, size: 15 });
+    if (laid >= 1 && down === 0) words(scene, 379, 40, 'the bridge lies in front', { anchor: 'middle', patch: true, size: 17 });
   },
 };
 

@@ -18,7 +18,7 @@ export const SLIT: Figure = {
   title: 'Slit',
   height: 262,
   describe: ({ units }) =>
-    `Two colours turn on neighbouring ends, and a slit stays open between them. One longer than ${lengthWords(SEW_FROM_MM, units)} is sewn from the back.`,
+    `Two colours turn on neighbouring ends, and a slit stays open between them. One longer than ${lengthWords(SEW_FROM_MM, units, 'fine')} is sewn from the back.`,
   draw: (scene, input, progress) => {
     const { ground, first } = shapeColours(input);
     layWarp(scene, WARP, warpColour(input));
@@ -27,7 +27,7 @@ export const SLIT: Figure = {
     const x = WARP.x + WARP.step * 3.5;
     if (progress < 1) return;
     scene.add(LEVEL.marks, `<path class="draw-hand" d="M${x} ${BOTTOM + 8}V${BOTTOM - PITCH * (ROWS - 1) - 8}" stroke="#2b5283" stroke-width="2.6" stroke-dasharray=".1 7" stroke-linecap="round"/>`);
-    measureBeside(scene, { x: x + 104, y: BOTTOM - 12 }, { x: x + 104, y: 66 }, `from ${lengthWords(SEW_FROM_MM, input.units)}: sew it`, { x: x + 116, y: 152 });
+    measureBeside(scene, { x: x + 104, y: BOTTOM - 12 }, { x: x + 104, y: 66 }, `from ${lengthWords(SEW_FROM_MM, input.units, 'fine')}: sew it`, { x: x + 116, y: 152 });
     words(scene, x, 22, 'slit', { anchor: 'middle', patch: true });
   },
 };

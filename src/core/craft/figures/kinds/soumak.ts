@@ -35,7 +35,7 @@ export const SOUMAK: Figure = {
     if (progress < 1) return;
     measure(scene, { x: endX(WARP, 0) - 14, y: 84 }, { x: endX(WARP, over - 1) + 14, y: 84 }, `over ${over}`);
     measure(scene, { x: endX(WARP, over - back) - 14, y: 44 }, { x: endX(WARP, over - 1) + 14, y: 44 }, `under ${back}`);
-    words(scene, 548, 52, 'the row back leans the other way', { anchor: 'end', patch: true, quiet: true, size: 15 });
+    words(scene, 548, 52, 'the row back leans the other way', { anchor: 'end', patch: true, quiet: true, size: 17 });
   },
 };
 

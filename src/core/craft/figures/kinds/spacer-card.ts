@@ -21,7 +21,7 @@ export const SPACER_CARD: Figure = {
   title: 'Spacer card and spacing row',
   height: 300,
   describe: ({ plan, units }) =>
-    `A card ${lengthWords(plan.cut.spacerCard.widthMm, units)} long and ${lengthWords(plan.cut.spacerCard.heightMm, units)} high goes over one end and under the next, down to the lower nails. A twined row on its upper edge holds the ends evenly apart.`,
+    `A card ${lengthWords(plan.cut.spacerCard.widthMm, units, 'least')} long and ${lengthWords(plan.cut.spacerCard.heightMm, units, 'least')} high goes over one end and under the next, down to the lower nails. A twined row on its upper edge holds the ends evenly apart.`,
   draw: (scene, input, progress) => {
     const [slide, push, twine] = stages(progress, [3, 2, 4] as const);
     const { spacerCard } = input.plan.cut;
@@ -34,9 +34,9 @@ export const SPACER_CARD: Figure = {
     layTwining(scene, warpColour(input), twine);
     if (slide > 0 && slide < 1) handWay(scene, trail(540, HIGH - 18).to(480, HIGH - 18).points);
     if (push > 0 && push < 1) handWay(scene, trail(516, HIGH + 20).to(516, LOW).points);
-    if (push >= 1) measure(scene, { x: 62, y: LOW }, { x: 62, y: LOW + CARD_HEIGHT }, lengthWords(spacerCard.heightMm, input.units));
-    if (twine >= 1) words(scene, 484, LOW - 4, 'spacing row', { quiet: true, size: 14 });
-    if (push >= 1) measure(scene, { x: LEFT, y: 284 }, { x: LEFT + WIDTH, y: 284 }, lengthWords(spacerCard.widthMm, input.units));
+    if (push >= 1) measure(scene, { x: 62, y: LOW }, { x: 62, y: LOW + CARD_HEIGHT }, lengthWords(spacerCard.heightMm, input.units, 'least'));
+    if (twine >= 1) words(scene, 556, LOW - 26, 'spacing row', { anchor: 'end', quiet: true, size: 17 });
+    if (push >= 1) measure(scene, { x: LEFT, y: 284 }, { x: LEFT + WIDTH, y: 284 }, lengthWords(spacerCard.widthMm, input.units, 'least'));
   },
 };
 

@@ -17,7 +17,7 @@ export const TABBY: Figure = {
   title: 'Tabby',
   height: 270,
   describe: ({ plan, units }) =>
-    `The weft goes over one end and under the next; the row after it does the opposite. Each row is laid in hills and then pressed down, so that it takes ${lengthWords(plan.weft.pickMm, units)} of yarn.`,
+    `The weft goes over one end and under the next; the row after it does the opposite. Each row is laid in hills and then pressed down, so that it takes ${lengthWords(plan.weft.pickMm, units, 'size')} of yarn.`,
   draw: (scene, input, progress) => {
     layWarp(scene, WARP, warpColour(input));
     const y = (row: number): number => 236 - row * PITCH;

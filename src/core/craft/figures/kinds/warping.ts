@@ -25,7 +25,7 @@ export const WARPING: Figure = {
   describe: (input) => {
     const way = input.piece.loom.warping === 'zigzag' ? 'up round a nail, down round the next one below, and so on' : 'along two neighbouring nails, then across to the other rail';
     const { count, nailsTop, nailsBottom } = input.plan.ends;
-    return `The warp runs ${way}, until ${countWords(count, 'end', 'ends')} stand on ${countWords(nailsTop, 'nail', 'nails')} above and ${nailsBottom} below, ${lengthWords(pitchMm(input), input.units)} from nail to nail.`;
+    return `The warp runs ${way}, until ${countWords(count, 'end', 'ends')} stand on ${countWords(nailsTop, 'nail', 'nails')} above and ${nailsBottom} below, ${lengthWords(pitchMm(input), input.units, 'fine')} from nail to nail.`;
   },
   draw: (scene, input, progress) => {
     const colour = warpColour(input);
@@ -38,8 +38,8 @@ export const WARPING: Figure = {
     layStrand(scene, { colour, width: WARP_WIDTH, runs: [{ level: LEVEL.warp, points: wound.points }] }, Math.max(0.02, progress));
     for (let i = 0; i < NAILS; i++) scene.add(LEVEL.ground + 1, nail(x(i), TOP) + nail(x(i), BOTTOM));
     const from = wound.points.at(-1);
-    if (progress >= 1 && from !== undefined) handWay(scene, trail(from.x + 16, from.y - 4).bend(from.x + 34, 150, from.x + 40, 84).points);
-    measureBeside(scene, { x: x(5), y: 272 }, { x: x(6), y: 272 }, `${lengthWords(pitchMm(input), input.units)} from nail to nail`, { x: 560, y: 298 }, 'end');
+    if (progress >= 1 && from !== undefined) handWay(scene, trail(from.x + 30, from.y + 22).to(from.x + 24, BOTTOM - 28).points);
+    measureBeside(scene, { x: x(5), y: 272 }, { x: x(6), y: 272 }, `${lengthWords(pitchMm(input), input.units, 'fine')} from nail to nail`, { x: 560, y: 298 }, 'end');
     const { count, nailsTop, nailsBottom } = input.plan.ends;
     words(scene, 0, 288, `${countWords(count, 'end', 'ends')}: ${countWords(nailsTop, 'nail', 'nails')} above, ${nailsBottom} below`);
   },

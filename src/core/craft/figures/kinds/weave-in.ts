@@ -35,7 +35,7 @@ export const WEAVE_IN: Figure = {
     const tip = layStrand(scene, { colour: first, width: 9, runs }, run);
     if (run < 1) needleAt(scene, tip);
     if (cut > 0) cutMark(scene, x + 22, to - 30);
-    if (progress >= 1) words(scene, x + 44, to - 22, 'cut here', { patch: true, size: 15 });
-    words(scene, 548, 24, 'the back of the cloth', { anchor: 'end', patch: true, quiet: true, size: 15 });
+    if (progress >= 1) words(scene, x + 44, to - 22, 'cut here', { patch: true, size: 17 });
+    words(scene, 548, 24, 'the back of the cloth', { anchor: 'end', patch: true, quiet: true, size: 17 });
   },
 };

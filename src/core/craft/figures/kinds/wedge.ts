@@ -31,7 +31,7 @@ export const WEDGE: Figure = {
     if (dune >= 1) numeral(scene, WARP.x + 6 * WARP.step, 188, 1);
     if (right >= 1) numeral(scene, WARP.x + 10.6 * WARP.step, 84, 2);
     if (left >= 1) numeral(scene, WARP.x + 1.4 * WARP.step, 84, 3);
-    if (dune > 0 && dune < 1) words(scene, 280, 24, 'turn one end earlier, every two rows', { anchor: 'middle', patch: true, size: 15 });
+    if (dune > 0 && dune < 1) words(scene, 280, 24, 'turn one end earlier, every two rows', { anchor: 'middle', patch: true, size: 17 });
   },
 };
 

@@ -41,7 +41,7 @@ interface WordsOptions {
 
 /** A line of words on its baseline. */
 export function words(scene: Scene, x: number, y: number, text: string, options: WordsOptions = {}): void {
-  const { anchor = 'start', size = 16, quiet = false, patch = false } = options;
+  const { anchor = 'start', size = 18, quiet = false, patch = false } = options;
   if (patch) scene.add(LEVEL.words, patchBehind(x, y, text, anchor, size));
   scene.add(
     LEVEL.words,
@@ -50,8 +50,12 @@ export function words(scene: Scene, x: number, y: number, text: string, options:
 }
 
 /** A face is not measured here: this is wide enough for every face in the list. */
+function widthOf(text: string, size: number): number {
+  return text.length * size * 0.56 + 14;
+}
+
 function patchBehind(x: number, y: number, text: string, anchor: Anchor, size: number): string {
-  const width = text.length * size * 0.56 + 14;
+  const width = widthOf(text, size);
   const left = anchor === 'middle' ? x - width / 2 : anchor === 'end' ? x - width + 7 : x - 7;
   return `<path class="draw-paper" d="M${num(left)} ${num(y - size * 1.02)}h${num(width)}v${num(size * 1.44)}h${num(-width)}z" fill="${PAPER}"/>`;
 }
@@ -62,7 +66,9 @@ export function measure(scene: Scene, from: Point, to: Point, text: string): voi
   const tick = (at: Point): string => (across ? `M${num(at.x)} ${num(at.y - 8)}v16` : `M${num(at.x - 8)} ${num(at.y)}h16`);
   const d = `M${num(from.x)} ${num(from.y)}L${num(to.x)} ${num(to.y)}${tick(from)}${tick(to)}`;
   scene.add(LEVEL.marks, `<path class="draw-line" d="${d}" stroke="${INK}" stroke-width="1.5"/>`);
-  words(scene, (from.x + to.x) / 2, (from.y + to.y) / 2 + 5.5, text, { anchor: 'middle', patch: true });
+  /* Words wider than the measure would hide it: they stand above. */
+  const above = across && widthOf(text, 18) > Math.abs(to.x - from.x) - 8;
+  words(scene, (from.x + to.x) / 2, (from.y + to.y) / 2 + (above ? -12 : 6), text, { anchor: 'middle', patch: true });
 }
 
 /** A measure too small to hold its words: they stand beside it. */
@@ -107,7 +113,7 @@ export function numeral(scene: Scene, x: number, y: number, value: number): void
     `<circle class="draw-paper" cx="${num(x)}" cy="${num(y)}" r="12" fill="${PAPER}"/>` +
       `<circle class="draw-line" cx="${num(x)}" cy="${num(y)}" r="12" stroke="${INK}" stroke-width="1.5"/>`,
   );
-  words(scene, x, y + 5.4, String(value), { anchor: 'middle', size: 15 });
+  words(scene, x, y + 5.4, String(value), { anchor: 'middle', size: 16 });
 }
 
 /** A hair line that guides the eye: the edge of the cloth, a level. */

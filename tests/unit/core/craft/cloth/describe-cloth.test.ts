@@ -7,22 +7,22 @@ describe('a cloth in words', () => {
 
   it('names the piece, its width, and its bands in the order they are woven', () => {
     expect(describeCloth(piece)).toBe(
-      'Low Tide, wall hanging, 40 cm wide. In the order it is woven: a rya fringe in Foam, 14 cm long, ' +
-        '16 cm of wedges in Slack Water and Dry Sand, 12 rows of soumak in Estuary.',
+      'Low Tide, wall hanging, 40\u00a0cm wide. In the order it is woven: a rya fringe in Foam, 14\u00a0cm long, ' +
+        '16\u00a0cm of wedges in Slack Water and Dry Sand, 12 rows of soumak in Estuary.',
     );
   });
 
   it('says how far it is, with the row of the band at the fell', () => {
-    expect(describeCloth(piece, { woven: (24 + 80) / 244 })).toContain(' Woven so far: 10.4 cm of 24.4 cm, row 48 of 96 in the wedges.');
-    expect(describeCloth(piece, { woven: 0 })).toContain(' Nothing woven yet, of 24.4 cm.');
+    expect(describeCloth(piece, { woven: (24 + 80) / 244 })).toContain(' Woven so far: 10\u00a0cm of 24\u00a0cm, row 48 of 96 in the wedges.');
+    expect(describeCloth(piece, { woven: 0 })).toContain(' Nothing woven yet, of 24\u00a0cm.');
     expect(describeCloth(piece, { woven: 1 })).not.toContain('Woven so far');
   });
 
   it('speaks in inches with fractions when asked', () => {
-    expect(describeCloth(piece, { units: 'in' })).toContain('15 3/4 in wide');
+    expect(describeCloth(piece, { units: 'in' })).toContain('15\u20093/4\u00a0in wide');
   });
 
   it('counts cords', () => {
-    expect(describeCloth(CORDS)).toBe('Three Knotted Cords, plant hanger, 76 cm long: 3 knotted cords.');
+    expect(describeCloth(CORDS)).toBe('Three Knotted Cords, plant hanger, 76\u00a0cm long: 3 knotted cords.');
   });
 });

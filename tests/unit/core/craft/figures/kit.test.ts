@@ -1,5 +1,5 @@
 import { describe, expect, it } from 'vitest';
-import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 import { Scene } from '#core/craft/figures/kit/scene.ts';
 import { stageOf, stages } from '#core/craft/figures/kit/stages.ts';
 import { cutAt, heading, lengthOf, trail } from '#core/craft/figures/kit/trail.ts';
@@ -37,16 +37,10 @@ describe('a scene', () => {
   });
 });
 
-describe('lengths in a figure', () => {
-  it.each([
-    [5, 'cm', '5 mm'],
-    [9.8, 'cm', '9.8 mm'],
-    [425, 'cm', '42.5 cm'],
-    [5, 'in', '3/16 in'],
-    [25.4, 'in', '1 in'],
-    [425, 'in', '16 3/4 in'],
-    [0, 'in', '0 in'],
-  ] as const)('says %d mm in %s as "%s"', (mm, units, text) => {
-    expect(lengthWords(mm, units)).toBe(text);
+describe('amounts in a figure', () => {
+  it('are written as in the text beside it', () => {
+    expect(lengthWords(425, 'cm', 'least')).toBe('42.5\u00a0cm');
+    expect(lengthWords(357.7, 'cm', 'cut')).toBe('36\u00a0cm');
+    expect(countWords(1, 'nail', 'nails')).toBe('1 nail');
   });
 });
