@@ -1,7 +1,8 @@
 /** Every form of the site, by feature. */
 import { bench } from './bench.ts';
 import { checkout } from './checkout.ts';
+import { following } from './following.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
 
-export const server = { bench, checkout, office, people };
+export const server = { bench, checkout, following, office, people };

@@ -1,0 +1,26 @@
+import { FinishForm, GatheredForm } from '#contracts/following.ts';
+import { TickInput } from '#contracts/ticks.ts';
+import { stepAnchor } from '#core/lesson-text/tree.ts';
+import { finishPart } from '#server/use-cases/progress/finish-part.ts';
+import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
+import { setTick } from '#server/use-cases/progress/set-tick.ts';
+import { formAction } from './form-action.ts';
+
+/** Forms of following a series. A form goes back to the page it stands on, at its place. */
+export const following = {
+  tick: formAction(TickInput, async (input, ctx, api) => {
+    await setTick(ctx, input);
+    return { to: `${api.url.pathname}${input.subject === 'step' ? `#${stepAnchor(input.item)}` : ''}` };
+  }),
+
+  gathered: formAction(GatheredForm, async (input, ctx, api) => {
+    const count = await keepGathered(ctx, input);
+    return { to: `${api.url.pathname}#gather`, said: count === 0 ? 'Nothing had changed.' : 'Your ticks are kept.' };
+  }),
+
+  finish: formAction(FinishForm, async (input, ctx) => {
+    const { number, next } = await finishPart(ctx, input);
+    if (!input.done) return { to: `/series/${input.series}/${number}#end`, said: `Part ${number} is open again.` };
+    return next === null ? { to: '/loom', said: `Part ${number} is done. The piece is off the loom.` } : { to: `/series/${input.series}/${next}`, said: `Part ${number} is done.` };
+  }),
+};

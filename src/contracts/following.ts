@@ -1,0 +1,21 @@
+/** Following a series: forms that work without JavaScript. */
+import { z } from 'astro/zod';
+
+const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
+const publicId = z.string().regex(/^[0-9a-z]{26}$/);
+
+/** Boxes of a gathering list as they were sent: `shown` were on the page, `had` were ticked when it was drawn. */
+export const GatheredForm = z.object({
+  series: slug,
+  shown: z.array(z.string().max(2_000)).max(200).default([]),
+  had: z.array(z.string().max(2_000)).max(200).default([]),
+  gathered: z.array(z.string().max(2_000)).max(200).default([]),
+}).transform(({ series, shown, had, gathered }) => ({
+  series,
+  /** Only what she changed: what another device ticked meanwhile stays. */
+  changes: [...new Set(shown)].filter((line) => had.includes(line) !== gathered.includes(line)).map((line) => ({ items: line.split('.'), ticked: gathered.includes(line) })),
+}));
+export type GatheredInput = z.output<typeof GatheredForm>;
+
+export const FinishForm = z.object({ series: slug, lesson: publicId, done: z.enum(['yes', 'no']).transform((word) => word === 'yes') });
+export type FinishInput = z.output<typeof FinishForm>;

@@ -1,0 +1,62 @@
+/** How far a student is in a series: which parts are done, how much of the one in hand, how much cloth that makes. */
+import type { PartStretch } from '#core/craft/cloth/parts-strip.ts';
+import type { Standing } from '#core/timetable/opening.ts';
+
+export type Verdict = 'waits' | 'weave-on' | 'mend-first';
+
+/** A part as it stands for one student. */
+export interface PartInHand {
+  readonly number: number;
+  readonly title: string;
+  /** Ids of the steps of its text, in order. */
+  readonly steps: readonly string[];
+  /** Ids ticked; some may belong to an older text. */
+  readonly ticked: ReadonlySet<string>;
+  readonly isFinished: boolean;
+  readonly asksForPhoto: boolean;
+  /** Of the newest photo; null without one. */
+  readonly verdict: Verdict | null;
+  readonly standing: Standing;
+}
+
+/** A part ends with the teacher's *weave on* where it asks for a photo, else when the student says so. */
+export function isDone(part: Pick<PartInHand, 'isFinished' | 'verdict'>): boolean {
+  return part.isFinished || part.verdict === 'weave-on';
+}
+
+export function stepsDone({ steps, ticked }: Pick<PartInHand, 'steps' | 'ticked'>): number {
+  return steps.filter((id) => ticked.has(id)).length;
+}
+
+/** 0 to 1: of a part in hand, the share of its steps. All steps ticked is not yet done: the last look is missing. */
+export function shareOf(part: PartInHand): number {
+  if (isDone(part)) return 1;
+  return part.steps.length === 0 ? 0 : Math.min(0.96, stepsDone(part) / part.steps.length);
+}
+
+export interface HowFar {
+  /** Parts done without a gap, with the share of the one that comes next: 2.5 of 7. */
+  readonly done: number;
+  /** The first part that is not done; undefined when all are. */
+  readonly inHand: PartInHand | undefined;
+}
+
+export function howFar(parts: readonly PartInHand[]): HowFar {
+  const at = parts.findIndex((part) => !isDone(part));
+  const inHand = parts[at];
+  return inHand === undefined ? { done: parts.length, inHand: undefined } : { done: at + shareOf(inHand), inHand };
+}
+
+/**
+ * Share of the woven height, 0 to 1, that is made after `done` parts.
+ * @param heights of the piece's bands, in mm, by their place
+ */
+export function wovenShare(done: number, stretches: readonly PartStretch[], heights: readonly number[]): number {
+  const total = heights.reduce((sum, height) => sum + height, 0);
+  if (total === 0) return 0;
+  const woven = stretches.reduce((sum, { bands }, part) => {
+    const high = bands.reduce<number>((height, band) => height + (typeof band === 'number' ? (heights[band] ?? 0) : 0), 0);
+    return sum + high * Math.min(1, Math.max(0, done - part));
+  }, 0);
+  return Math.min(1, woven / total);
+}

@@ -1,0 +1,141 @@
+/** Lines of a gathering list with a student's own amounts, ready to be shown. */
+import { amountOf, lengthOf, massOf } from '#core/craft/amounts.ts';
+import type { MadeFor } from '#core/craft/made-for.ts';
+import type { Piece, Yarn } from '#core/craft/piece.ts';
+import { gramsInHand } from '#core/gathering/yarn-table.ts';
+import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
+import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+
+export interface ShownLine {
+  readonly key: string;
+  readonly items: readonly string[];
+  readonly kind: GatheringLine['kind'];
+  readonly name: string;
+  readonly ticked: boolean;
+  readonly colour: string | undefined;
+  readonly amount: readonly AmountPart[] | string | null;
+  readonly also: string;
+  readonly when: string;
+  readonly note: string;
+  readonly standIn: string;
+}
+
+export interface ShownFor {
+  /** Null for a series whose piece is not told: amounts are left open. */
+  readonly made: MadeFor | null;
+  /** The teacher's own yarns, to say which of them the student's stands for. */
+  readonly pattern: Piece | null;
+  readonly units: Units;
+  /** False in the list of a single part, where everybody knows which it is. */
+  readonly tellParts: boolean;
+}
+
+/** One line for each thing. Yarn comes first, then tools, then what else is needed. */
+export function gatherRows(lines: readonly GatheringLine[], shownFor: ShownFor): ShownLine[] {
+  const merged = mergeLines(shownFor.tellParts ? asWholeYarns(lines, shownFor.pattern) : lines);
+  const order = ['yarn', 'tool', 'material'] as const;
+  return order.flatMap((kind) => merged.filter((line) => line.kind === kind).map((line) => rowOf(line, shownFor)));
+}
+
+/** The role a yarn's amount speaks of: `yarn.<role>`, or the yarn of a band. */
+export function roleOfKey(key: string | null, piece: Piece | null): string | undefined {
+  const [subject, name, what] = key?.split('.') ?? [];
+  if (subject === 'yarn') return name;
+  return subject === 'band' && what === 'yarn' ? piece?.bands.find((band) => band.name === name)?.yarn : undefined;
+}
+
+/**
+ * A part may ask for the yarn of one band, or for what is left of a yarn; in the list of the whole series that is
+ * within the yarn's own line already, and nobody should buy it twice.
+ */
+function asWholeYarns(lines: readonly GatheringLine[], pattern: Piece | null): GatheringLine[] {
+  const whole = new Map<string, string>();
+  for (const { kind, name, amountKey } of lines) {
+    if (kind === 'yarn' && amountKey?.startsWith('yarn.') === true && !whole.has(name.toLowerCase())) whole.set(name.toLowerCase(), amountKey);
+  }
+  return lines.map((line) => {
+    if (line.kind !== 'yarn' || line.amountKey?.startsWith('yarn.') === true) return line;
+    const role = roleOfKey(line.amountKey, pattern);
+    const own = role === undefined ? undefined : [...whole.values()].find((key) => key === `yarn.${role}`);
+    const amountKey = own ?? (line.amountKey === null ? whole.get(line.name.toLowerCase()) : undefined);
+    return amountKey === undefined ? line : { ...line, amountKey };
+  });
+}
+
+function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
+  const { made, pattern, units } = shownFor;
+  const role = line.kind === 'yarn' ? roleOfKey(line.amountKey, made?.piece ?? null) : undefined;
+  const isWarp = line.kind === 'yarn' && line.amountKey === 'warp';
+  const yarn = isWarp ? made?.piece.warp.yarn : role === undefined ? undefined : made?.piece.yarns[role];
+  const patternYarn = role === undefined ? undefined : pattern?.yarns[role];
+  return {
+    key: line.publicIds.join('.'),
+    items: line.publicIds,
+    kind: line.kind,
+    name: ownName(line.name, yarn, patternYarn),
+    ticked: line.ticked,
+    colour: line.kind === 'yarn' ? yarn?.colour : undefined,
+    amount: amountIn(line, made, units),
+    also: line.kind === 'yarn' ? weightWords(line, role, made, units) : '',
+    when: shownFor.tellParts ? partsWords(line.parts, line.untilPart) : '',
+    note: line.note ?? '',
+    standIn: isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
+  };
+}
+
+const isOwnYarn = (yarn: Yarn | undefined, pattern: Yarn | undefined): boolean => yarn !== undefined && pattern !== undefined && yarn !== pattern && yarn.label !== pattern.label;
+
+/** Her own yarn under its own name, so that she finds it in her basket. */
+function ownName(name: string, yarn: Yarn | undefined, pattern: Yarn | undefined): string {
+  return isOwnYarn(yarn, pattern) ? `${yarn?.label ?? 'Your own yarn'} (for ${name})` : name;
+}
+
+function amountIn({ amountKey, amountText: words }: MergedLine, made: MadeFor | null, units: Units): ShownLine['amount'] {
+  if (amountKey === null || made === null) return words;
+  const amount = amountOf(amountKey, made.piece, made.plan);
+  return amount.ok ? formatAmount(amount.value, units) : words;
+}
+
+function weightWords({ amountKey }: MergedLine, role: string | undefined, made: MadeFor | null, units: Units): string {
+  if (made === null || amountKey === null || amountKey.startsWith('band.')) return '';
+  const plan = amountKey === 'warp' ? made.plan.warp : role === undefined ? undefined : made.plan.yarns[role];
+  if (plan === undefined) return '';
+  const weight = amountText(massOf(gramsInHand(plan)), units);
+  return plan.balls === undefined ? weight : `${weight}, ${plan.balls === 1 ? '1 ball' : `${plan.balls} balls`}`;
+}
+
+/** `Parts 2, 3 and 5 to 7.` */
+export function partsWords(parts: readonly number[], untilPart: number | null): string {
+  const runs: number[][] = [];
+  for (const part of [...parts].sort((a, b) => a - b)) {
+    const run = runs.at(-1);
+    if (run !== undefined && run.at(-1) === part - 1) run.push(part);
+    else runs.push([part]);
+  }
+  const words = runs.flatMap((run) => (run.length > 2 ? [`${run[0] ?? ''} to ${run.at(-1) ?? ''}`] : run.map(String)));
+  const listed = words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;
+  const last = Math.max(...parts);
+  const kept = untilPart !== null && untilPart > last ? `, kept until Part ${untilPart}` : '';
+  return `${parts.length === 1 ? 'Part' : 'Parts'} ${listed}${kept}`;
+}
+
+export interface YarnSum {
+  readonly lengthMm: number;
+  readonly grams: number;
+}
+
+/** All yarn to have in hand, warp and weft together. */
+export function yarnSum({ plan }: MadeFor): YarnSum {
+  const all = [plan.warp, ...Object.values(plan.yarns)];
+  return { lengthMm: all.reduce((sum, { withMarginMm }) => sum + withMarginMm, 0), grams: all.reduce((sum, yarn) => sum + gramsInHand(yarn), 0) };
+}
+
+/** `36 cm inside, nails every 8 mm, ends in pairs: 76 ends, woven 30 cm wide` */
+export function loomWords({ piece, plan }: MadeFor, units: Units): string {
+  const size = (mm: number): string => amountText(lengthOf(mm, 'size'), units);
+  const inside = piece.loom.insideWidthMm === undefined ? '' : `${size(piece.loom.insideWidthMm)} inside, `;
+  const nth = piece.loom.everyNthNail ?? 1;
+  const nails = `nails every ${amountText(lengthOf(piece.loom.nailPitchMm, 'fine'), units)}${nth === 1 ? '' : `, one in ${nth} used`}`;
+  return `${inside}${nails}, ${piece.warp.endsTogether === 2 ? 'doubled' : 'single'} ends: ${plan.ends.count} ends, woven ${size(piece.size.widthMm)} wide`;
+}

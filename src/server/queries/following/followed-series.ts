@@ -1,0 +1,59 @@
+/** A series as one person follows it: its parts, her piece, and how far she is. */
+import { QueryTypes } from 'sequelize';
+import type { PartInHand } from '#core/following/progress.ts';
+import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
+import type { Actor } from '#server/context.ts';
+import { sequelize } from '#server/db/sequelize.ts';
+import { piecesOf, type PiecesOf } from '#server/queries/pieces/pieces-of.ts';
+import { seriesFor, type PartFor, type SeriesFor } from '#server/queries/series/series-for.ts';
+
+export interface FollowedSeries {
+  readonly series: SeriesFor;
+  readonly pieces: PiecesOf;
+  /** In the order of `series.parts`. Without a seat nothing is ticked. */
+  readonly progress: readonly PartInHand[];
+  /** Keys of the amounts each part's text speaks of, in the order of the parts. */
+  readonly amountKeys: readonly (readonly string[])[];
+}
+
+interface FactsRow { readonly lessonId: number; readonly facts: LessonFacts }
+interface TickRow { readonly itemKey: string }
+
+/** Null when there is no such series, or when it must look as if there were none. */
+export async function followedSeries(actor: Actor | null, slug: string, now: Date): Promise<FollowedSeries | null> {
+  const series = await seriesFor(actor, slug, now);
+  if (series === null) return null;
+  const [pieces, facts, ticks] = await Promise.all([
+    piecesOf(series.id, series.seat?.enrolmentId ?? null),
+    sequelize.query<FactsRow>(
+      `SELECT l.id AS lessonId, v.facts FROM lessons l JOIN lesson_versions v ON v.id = l.published_version_id
+        WHERE l.series_id = ? AND l.taken_out_at IS NULL`,
+      { replacements: [series.id], type: QueryTypes.SELECT },
+    ),
+    series.seat === null ? [] : sequelize.query<TickRow>(
+      `SELECT item_key AS itemKey FROM ticks WHERE enrolment_id = ? AND subject = 'step' AND is_ticked = 1`,
+      { replacements: [series.seat.enrolmentId], type: QueryTypes.SELECT },
+    ),
+  ]);
+  const factsOf = ({ id }: PartFor): LessonFacts | undefined => facts.find(({ lessonId }) => lessonId === id)?.facts;
+  return {
+    series,
+    pieces,
+    progress: series.parts.map((part) => partInHand(part, factsOf(part), ticks)),
+    amountKeys: series.parts.map((part) => factsOf(part)?.amounts ?? []),
+  };
+}
+
+function partInHand(part: PartFor, facts: LessonFacts | undefined, ticks: readonly TickRow[]): PartInHand {
+  const begins = `${part.publicId}:`;
+  return {
+    number: part.number,
+    title: part.title,
+    steps: facts?.steps.map(({ id }) => id) ?? [],
+    ticked: new Set(ticks.filter(({ itemKey }) => itemKey.startsWith(begins)).map(({ itemKey }) => itemKey.slice(begins.length))),
+    isFinished: part.finishedAt !== null,
+    asksForPhoto: part.checkpoint !== null,
+    verdict: part.verdict,
+    standing: part.access.may === 'wait' ? part.access.standing : { open: true },
+  };
+}
