@@ -1,5 +1,6 @@
 /** Lines of a gathering list with a student's own amounts, ready to be shown. */
-import { amountOf, lengthOf, massOf } from '#core/craft/amounts.ts';
+import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import { amountOf } from '#core/craft/amounts.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
 import type { Piece, Yarn } from '#core/craft/piece.ts';
 import { gramsInHand } from '#core/gathering/yarn-table.ts';
