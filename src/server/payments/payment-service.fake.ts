@@ -33,7 +33,7 @@ export class FakePaymentService implements PaymentService {
   }
 
   settle(checkoutId: string, paid: boolean): Checkout {
-    return this.#change(checkoutId, { payment: paid ? 'paid' : 'unpaid' });
+    return this.#change(checkoutId, { payment: paid ? 'paid' : 'refused' });
   }
 
   letExpire(checkoutId: string): Checkout {

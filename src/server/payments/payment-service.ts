@@ -37,8 +37,8 @@ export interface Checkout {
   readonly orderId: string | undefined;
   /** `expired` is final: nobody can pay any more. */
   readonly status: 'open' | 'complete' | 'expired';
-  /** A complete checkout that is `unpaid` waits for a slow way of paying. */
-  readonly payment: 'unpaid' | 'paid' | 'nothing-to-pay';
+  /** A complete checkout that is `unpaid` waits for a slow way of paying; `refused` when that came to nothing. */
+  readonly payment: 'unpaid' | 'paid' | 'nothing-to-pay' | 'refused';
   /** Where to send the buyer; only while open. */
   readonly url: string | undefined;
   readonly currency: string;

@@ -54,7 +54,7 @@ export class StripePaymentService implements PaymentService {
   }
 
   readCheckout(checkoutId: string): Promise<PaymentAnswer<Checkout>> {
-    return this.#ask(async () => checkoutOf(await this.#stripe.checkout.sessions.retrieve(checkoutId)));
+    return this.#ask(async () => checkoutOf(await this.#stripe.checkout.sessions.retrieve(checkoutId, { expand: ['payment_intent'] })));
   }
 
   findCheckout(orderId: string, since: Date): Promise<PaymentAnswer<Checkout | undefined>> {
@@ -179,9 +179,12 @@ function statusOf({ status }: Stripe.Checkout.Session): Checkout['status'] {
   return status === 'expired' ? 'expired' : 'open';
 }
 
-function paymentOf({ payment_status: status }: Stripe.Checkout.Session): Checkout['payment'] {
-  if (status === 'paid') return 'paid';
-  return status === 'no_payment_required' ? 'nothing-to-pay' : 'unpaid';
+function paymentOf({ status, payment_status: paid, payment_intent: intent }: Stripe.Checkout.Session): Checkout['payment'] {
+  if (paid === 'paid') return 'paid';
+  if (paid === 'no_payment_required') return 'nothing-to-pay';
+  // A complete checkout says no more than "unpaid"; whether it still may be is the payment's own affair.
+  const isOver = intent !== null && typeof intent === 'object' && (intent.status === 'requires_payment_method' || intent.status === 'canceled');
+  return status === 'complete' && isOver ? 'refused' : 'unpaid';
 }
 
 function refundOf(refund: Stripe.Refund): Refund {

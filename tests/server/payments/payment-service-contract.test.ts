@@ -8,6 +8,8 @@ interface Played {
   readonly payments: PaymentService;
   pay(checkoutId: string): Promise<void>;
   payLater(checkoutId: string): Promise<void>;
+  /** A slow way of paying that comes to nothing. */
+  payInVain(checkoutId: string): Promise<void>;
 }
 
 const trials: Trial[] = [];
@@ -28,6 +30,10 @@ async function real(): Promise<Played> {
     async payLater(id) {
       await buyerDoes(page(id), { do: 'debit', email: 'amara@weavers.example', account: 'DE89370400440532013000' });
     },
+    async payInVain(id) {
+      await buyerDoes(page(id), { do: 'debit', email: 'amara@weavers.example', account: 'DE62370400440532013001' });
+      trial.standIns.clock.advance(3601);
+    },
   };
 }
 
@@ -40,6 +46,10 @@ async function fake(): Promise<Played> {
     },
     async payLater(id) {
       payments.payLater(id);
+    },
+    async payInVain(id) {
+      payments.payLater(id);
+      payments.settle(id, false);
     },
   };
 }
@@ -71,8 +81,9 @@ describe.each([
   });
 
   test('shows a checkout that was paid, that is being paid, and that was closed', async () => {
-    const { payments, pay, payLater } = await begin();
-    const [paid, later, closed] = [
+    const { payments, pay, payLater, payInVain } = await begin();
+    const [paid, later, inVain, closed] = [
+      valueOf(await payments.createCheckout(checkoutRequest())),
       valueOf(await payments.createCheckout(checkoutRequest())),
       valueOf(await payments.createCheckout(checkoutRequest())),
       valueOf(await payments.createCheckout(checkoutRequest())),
@@ -84,6 +95,8 @@ describe.each([
     expect(valueOf(await payments.readCheckout(later.id))).toMatchObject({ status: 'complete', payment: 'unpaid', paymentId: expect.stringMatching(/^pi_/) as string });
     expect(await payments.expireCheckout(paid.id)).toMatchObject({ ok: false, failure: { kind: 'not-possible' } });
     expect(await payments.expireCheckout(closed.id)).toMatchObject({ ok: false, failure: { kind: 'not-possible' } });
+    await payInVain(inVain.id);
+    expect(valueOf(await payments.readCheckout(inVain.id))).toMatchObject({ status: 'complete', payment: 'refused' });
   });
 
   test('gives money back once for one refund, in parts, and never too much', async () => {

@@ -5,6 +5,9 @@ import { isCurrency } from '#core/money/currency.ts';
 import { formatPrice } from '#core/money/format-price.ts';
 import { defineTemplate } from '#server/mail/template.ts';
 
+const GIVEN_UP = 'You asked that the parts open at once, and you know that by this you gave up the fourteen days in which you could have withdrawn.';
+const MAY_WITHDRAW = 'You may withdraw within fourteen days and have your money back. Answer this letter, and say so.';
+
 export const seatBought = defineTemplate({
   data: z.object({
     seriesTitle: z.string(),
@@ -30,12 +33,18 @@ export const seatBought = defineTemplate({
           ['When', DateTime.fromISO(data.paidAt, { zone: data.timeZone }).setLocale('en-GB').toFormat('d LLLL yyyy, HH:mm (z)')],
         ],
       },
-      {
-        kind: 'words',
-        words: data.withdrawalGivenUp
-          ? 'You asked that the parts open at once, and you know that by this you gave up the fourteen days in which you could have withdrawn.'
-          : 'You may withdraw within fourteen days and have your money back. Answer this letter, and say so.',
-      },
+      ...(data.amountMinor === 0 ? [] : [{ kind: 'words', words: data.withdrawalGivenUp ? GIVEN_UP : MAY_WITHDRAW } as const]),
+    ],
+  }),
+});
+
+export const seatRefused = defineTemplate({
+  data: z.object({ seriesTitle: z.string(), seriesSlug: z.string() }),
+  write: (data, { publicUrl }) => ({
+    subject: `Your bank said no: ${data.seriesTitle}`,
+    blocks: [
+      { kind: 'words', words: `Your bank did not pay for your seat in ${data.seriesTitle}. Nothing was taken. Try another way of paying, or ask your bank.` },
+      { kind: 'act', label: 'Take a seat', href: `${publicUrl}/series/${data.seriesSlug}` },
     ],
   }),
 });

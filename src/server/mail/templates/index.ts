@@ -1,7 +1,7 @@
 /** Every letter the house writes, by name. A template's data is checked when the letter is written and again when it is sent. */
 import type { z } from 'astro/zod';
 import { verdict } from './bench.ts';
-import { seatBought } from './checkout.ts';
+import { seatBought, seatRefused } from './checkout.ts';
 import { workroomOpened } from './office.ts';
 import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
 
@@ -11,6 +11,7 @@ export const TEMPLATES = {
   'new-password': newPassword,
   'password-changed': passwordChanged,
   'seat-bought': seatBought,
+  'seat-refused': seatRefused,
   verdict,
   'workroom-opened': workroomOpened,
 } as const;

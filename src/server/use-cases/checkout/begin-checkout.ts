@@ -1,76 +1,87 @@
-import { isCurrency } from '#core/money/currency.ts';
+import { isCurrency, type Currency } from '#core/money/currency.ts';
+import type { MyPiece } from '#core/craft/fit.ts';
+import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import { TERMS_WORDS_VERSION, type CheckoutInput, type OrderTerms } from '#contracts/checkout.ts';
-import { config } from '#server/config.ts';
 import type { Actor, Context } from '#server/context.ts';
 import { newPublicId } from '#server/db/public-id.ts';
 import { withTransaction } from '#server/db/transaction.ts';
-import { AppError, authorize, found } from '#server/errors.ts';
-import { Enrolment, Order, Series, User } from '#server/models/index.ts';
-import { checkoutExpiry, type CheckoutRequest, type PaymentFailure } from '#server/payments/payment-service.ts';
+import { AppError, found, signedIn } from '#server/errors.ts';
+import { Enrolment, Order, PatternPiece, Series, User } from '#server/models/index.ts';
 import { mayBuy } from '#server/policies/person.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
+import { giveSeat } from './_give-seat.ts';
+import { newRequest, seatPage } from './_order-request.ts';
+import { payPageOf } from './_pay-page.ts';
 
-/** A pay page that ends sooner than this is not offered again. */
-const LEAST_LEFT_MS = 5 * 60_000;
+interface Wish {
+  readonly actor: Actor;
+  readonly terms: OrderTerms;
+  /** Her own piece, begun on the loom she tried. */
+  readonly loom: MyPiece | null;
+}
 
 /**
- * Begins to buy a seat and returns the address of the page to pay on. Asked again before that page ends, it gives the
- * same page. The order and the exact request are kept before the payment service hears of them, so that an answer
- * that was lost can be asked for again.
- * @throws CONFLICT when she has a seat; FORBIDDEN when her address is not confirmed; UPSTREAM when the service does not answer.
+ * Begins to buy a seat and returns where to go: the page to pay on, or, when there is nothing to pay, the page of the
+ * seat. Asked again before the pay page ends, it gives the same page. The order and the exact request are kept before
+ * the payment service hears of them, so that an answer that was lost can be asked for again.
+ * @throws CONFLICT when she has a seat; VALIDATION when her address is not confirmed; UPSTREAM when the service does not answer.
  */
-export async function beginCheckout(ctx: Context, input: CheckoutInput): Promise<{ payUrl: string }> {
-  authorize(ctx.actor !== null, 'UNAUTHENTICATED');
-  if (!mayBuy(ctx.actor)) throw new AppError('VALIDATION', { says: 'Confirm your address first: the receipt goes there. The link is in your mail.' });
-  await countUse(RATE_RULES.checkout, ctx.actor.publicId);
+export async function beginCheckout(ctx: Context, input: CheckoutInput): Promise<{ to: string }> {
+  const actor = signedIn(ctx);
+  if (!mayBuy(actor)) throw new AppError('VALIDATION', { says: 'Confirm your address first: the receipt goes there. The link is in your mail.' });
+  await countUse(RATE_RULES.checkout, actor.publicId);
   const series = found(await Series.findOne({ where: { slug: input.series, state: 'published' } }));
-  const order = await withTransaction(() => takeOrder(ctx, ctx.actor, series, input));
-  if (order.payUrl !== null) return { payUrl: order.payUrl };
-  const answer = await ctx.services.payments.createCheckout(requestOf(order));
-  if (!answer.ok) throw refusal(answer.failure);
-  const payUrl = answer.value.url;
-  if (payUrl === undefined) throw new AppError('UPSTREAM', { message: 'checkout without an address' });
-  await order.update({ sessionId: answer.value.id, payUrl });
-  return { payUrl };
+  const { startAtOnce, withdrawalGivenUp } = input;
+  const terms: OrderTerms = { wordsVersion: TERMS_WORDS_VERSION, startAtOnce, withdrawalGivenUp, agreedAt: ctx.clock.now().toISOString() };
+  const wish: Wish = { actor, terms, loom: await pieceOnLoom(series, input) };
+  if (series.priceMinor === 0) {
+    await withTransaction(() => takeFreeSeat(ctx, series.id, wish));
+    return { to: seatPage(series.slug) };
+  }
+  const order = await withTransaction(() => takeOrder(ctx, series, wish));
+  return { to: await payPageOf(ctx, order, { series, buyerAddress: actor.email }) };
 }
 
-/** The buyer's open order, or a new one. Her own row is the lock: two clicks make one order. */
-async function takeOrder(ctx: Context, actor: Actor | null, series: Series, input: CheckoutInput): Promise<Order> {
-  authorize(actor !== null, 'UNAUTHENTICATED');
+/** A loom on which the piece does not fit is not held against her: she tells us of another one later. */
+async function pieceOnLoom({ id, title }: Series, { loom }: CheckoutInput): Promise<MyPiece | null> {
+  const pattern = loom === null ? null : await PatternPiece.findByPk(id);
+  if (loom === null || pattern === null) return null;
+  const trial = tryOnLoom(pattern.data, title, loom);
+  return trial.ok && trial.fits ? trial.mine : null;
+}
+
+/** The buyer's own row is the lock: two clicks make one order. */
+async function lockBuyer(actor: Actor, seriesId: number): Promise<void> {
   await User.findByPk(actor.userId, { lock: true });
-  const seat = await Enrolment.findOne({ where: { userId: actor.userId, seriesId: series.id, state: 'active' } });
+  const seat = await Enrolment.findOne({ where: { userId: actor.userId, seriesId, state: 'active' } });
   if (seat !== null) throw new AppError('CONFLICT', { says: 'You have a seat in this series already. It is on your loom.' });
-  const { priceMinor, currency } = series;
+}
+
+function priceOf({ priceMinor, currency }: Series): { amountMinor: number; currency: Currency } {
   if (priceMinor === null || !isCurrency(currency)) throw new AppError('CONFLICT', { says: 'This series has no price yet, so no seat can be taken.' });
-  const open = await Order.findOne({ where: { userId: actor.userId, seriesId: series.id, state: 'pending' }, order: [['id', 'DESC']] });
-  const now = ctx.clock.now();
-  if (open !== null && open.amountMinor === priceMinor && open.currency === currency && open.expiresAt.getTime() - now.getTime() > LEAST_LEFT_MS) return open;
-  const terms: OrderTerms = { wordsVersion: TERMS_WORDS_VERSION, startAtOnce: input.startAtOnce, withdrawalGivenUp: input.withdrawalGivenUp, agreedAt: now.toISOString() };
+  return { amountMinor: priceMinor, currency };
+}
+
+/** The buyer's open order, or a new one. What she agreed to last is what holds. */
+async function takeOrder(ctx: Context, series: Series, wish: Wish): Promise<Order> {
+  await lockBuyer(wish.actor, series.id);
+  const { amountMinor, currency } = priceOf(series);
+  const open = await Order.findOne({ where: { userId: wish.actor.userId, seriesId: series.id, state: 'pending' }, order: [['id', 'DESC']] });
+  const { terms, loom } = wish;
+  return open !== null && open.amountMinor === amountMinor && open.currency === currency ? open.update({ terms, loom }) : newOrder(ctx, series, wish);
+}
+
+function newOrder(ctx: Context, series: Series, { actor, terms, loom }: Wish): Promise<Order> {
   const publicId = newPublicId();
-  const expiresAt = checkoutExpiry(now);
-  const pages = `${config().publicUrl}/series/${series.slug}`;
-  const request: CheckoutRequest = {
-    orderId: publicId,
-    attempt: 1,
-    currency,
-    lines: [{ name: series.title, description: 'A seat in the series', amountMinor: priceMinor, quantity: 1 }],
-    buyerAddress: actor.email,
-    successUrl: `${pages}/seat?checkout={CHECKOUT_SESSION_ID}`,
-    cancelUrl: `${pages}?paying=stopped`,
-    expiresAt,
-  };
-  return Order.create({ publicId, userId: actor.userId, seriesId: series.id, amountMinor: priceMinor, currency, terms, expiresAt, checkoutParameters: { ...request, expiresAt: expiresAt.toISOString() } });
+  const price = priceOf(series);
+  const request = newRequest({ orderId: publicId, attempt: 1, ...price, series, buyerAddress: actor.email }, ctx.clock.now());
+  return Order.create({ publicId, userId: actor.userId, seriesId: series.id, ...price, terms, loom, expiresAt: new Date(request.expiresAt), checkoutParameters: request });
 }
 
-/** The request exactly as it was kept. */
-function requestOf(order: Order): CheckoutRequest {
-  const kept = order.checkoutParameters as unknown as Omit<CheckoutRequest, 'expiresAt'> & { expiresAt: string };
-  return { ...kept, expiresAt: new Date(kept.expiresAt) };
-}
-
-function refusal(failure: PaymentFailure): AppError {
-  const lost = 'The payment service does not answer just now. Nothing was taken; try again in a minute.';
-  return failure.kind === 'unreachable'
-    ? new AppError('UPSTREAM', { says: lost, message: failure.message })
-    : new AppError('BUG', { message: `checkout refused: ${failure.kind} ${failure.message}` });
+/** Nothing is asked of the payment service; the order and its letter are made as for any other seat. */
+async function takeFreeSeat(ctx: Context, seriesId: number, wish: Wish): Promise<void> {
+  const series = found(await Series.findByPk(seriesId, { lock: true }));
+  await lockBuyer(wish.actor, series.id);
+  if (series.state !== 'published' || series.priceMinor !== 0) throw new AppError('CONFLICT', { says: 'The price changed just now. Look at it and take your seat again.' });
+  await giveSeat(ctx, series, await newOrder(ctx, series, wish), null);
 }
