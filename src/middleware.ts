@@ -60,7 +60,8 @@ function takeSaid(context: APIContext): string | null {
  * page again. Returns null when the request is no form.
  */
 async function answerFormAction(context: APIContext, next: MiddlewareNext): Promise<Response | null> {
-  const { action, setActionResult, serializeActionResult } = getActionContext(context);
+  const sent = getActionContext(context);
+  const { action } = sent;
   if (action?.calledFrom !== 'form') return null;
   const result = await action.handler();
   const answer = result.data as FormAnswer | undefined;
@@ -71,7 +72,7 @@ async function answerFormAction(context: APIContext, next: MiddlewareNext): Prom
     if (answer.said !== undefined) context.cookies.set(said.name, answer.said, said.options);
     return context.redirect(answer.to, 303);
   }
-  setActionResult(action.name, serializeActionResult(result));
+  sent.setActionResult(action.name, sent.serializeActionResult(result));
   const page = await next();
   if (page.status !== 200) return page;
   if (answer.retryAfterSeconds !== undefined) page.headers.set('retry-after', String(answer.retryAfterSeconds));

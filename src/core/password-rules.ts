@@ -14,7 +14,7 @@ export interface PasswordSurroundings {
   /** What others know of the person: her name, her address. */
   readonly ownWords: readonly string[];
   /** Whether many people use `text` (lower case) as a password, or as the body of one. */
-  isCommon(text: string): boolean;
+  readonly isCommon: (text: string) => boolean;
 }
 
 export type PasswordVerdict =

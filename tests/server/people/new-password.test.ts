@@ -126,7 +126,7 @@ describe('changing the password', () => {
     const user = await buildUserWithPassword();
     const now = new Date();
     const { token: old } = await beginSession(user.id, 'student', '', now);
-    const { token } = await changePassword({ ...(await contextFor(user)), actor: await actorOfToken(old), clock: { now: () => now } } as TestContext, { oldPassword: GOOD_PASSWORD, password: OTHER_PASSWORD }, 'a browser');
+    const { token } = await changePassword({ ...(await contextFor(user)), actor: await actorOfToken(old), clock: { now: () => now } }, { oldPassword: GOOD_PASSWORD, password: OTHER_PASSWORD }, 'a browser');
     expect(await actorOfToken(old)).toBeNull();
     expect(await actorOfToken(token)).toMatchObject({ userId: user.id });
     expect(await opens(user, OTHER_PASSWORD)).toBe(true);
