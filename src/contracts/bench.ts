@@ -21,7 +21,7 @@ const Notes = z.string().max(40_000).transform((text, context): unknown => {
 
 export const VerdictForm = z.object({
   photo: z.string().regex(/^[0-9a-z]{26}$/),
-  verdict: z.enum(['weave-on', 'mend-first'], { required_error: 'Choose weave on or mend first.', invalid_type_error: 'Choose weave on or mend first.' }),
+  verdict: z.enum(['weave-on', 'mend-first'], { errorMap: () => ({ message: 'Choose weave on or mend first.' }) }),
   words: z.string().trim().max(2_000, 'At most 2,000 characters work here.').default(''),
   notes: Notes.default('[]'),
 }).superRefine(({ verdict, words, notes }, context) => {
