@@ -10,7 +10,11 @@ const DOUBLED_FROM = 6;
 export function drawEnds(top: number, bottom: number, weave: Weave, x0 = 0, x1 = weave.width): string {
   const height = bottom - top;
   if (height <= 0) return '';
-  const d = `M${num(x0)} ${num(top + height / 2)}H${num(x1)}`;
+  return strokeEnds(`M${num(x0)} ${num(top + height / 2)}H${num(x1)}`, height, weave);
+}
+
+/** The ends under lying lines of a given thickness. Every line begins at a multiple of two ends. */
+export function strokeEnds(d: string, height: number, weave: Weave): string {
   if (weave.endsTogether === 2 && weave.end >= DOUBLED_FROM) return drawDoubled(d, height, weave);
   const { warpColour, warpWidth: width, paths } = weave;
   let drawn = paths.stroke(d, shade(warpColour, 0.45), height, eachEnd(weave, width, 0));
@@ -33,6 +37,6 @@ function drawDoubled(d: string, height: number, weave: Weave): string {
 }
 
 /** A dash `width` px wide on each end, `off` px beside its middle. */
-export function eachEnd(weave: Weave, width: number, off: number): string {
+function eachEnd(weave: Weave, width: number, off: number): string {
   return dashes(width, weave.end - width, weave.end / 2 - width / 2 + off);
 }

@@ -1,8 +1,8 @@
 /** A band of tabby, and the shapes (wedges, slopes, circles) woven into it. */
 import type { ClothShape, TabbyBand } from '#core/craft/cloth/cloth-piece.ts';
 import { shade } from '#core/craft/cloth/colour.ts';
-import { drawEnds } from '#core/craft/cloth/ends.ts';
-import { box, dashes, num } from '#core/craft/cloth/markup.ts';
+import { drawEnds, strokeEnds } from '#core/craft/cloth/ends.ts';
+import { box, num } from '#core/craft/cloth/markup.ts';
 import { drawPicks, rowsOver, type PickRow } from '#core/craft/cloth/picks.ts';
 import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
 import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
@@ -58,14 +58,13 @@ function snap(end: number, weave: Weave): number {
 
 function drawShape(shape: ClothShape, rows: readonly PickRow[], pitch: number, cover: number, weave: Weave): string {
   if (rows.length === 0) return '';
-  const { paths, end, warpWidth } = weave;
+  const { paths } = weave;
   const stretch = rows.map((row) => `M${num(row.x0)} ${num(row.y)}H${num(row.x1)}`).join('');
   const picks = drawPicks(rows, pitch, shape.colour, cover, weave);
-  const oneEnd = dashes(warpWidth * 0.8, end - warpWidth * 0.8, end / 2 - warpWidth * 0.4);
   return (
     paths.stroke(stretch, shade(shape.colour, 0.6), pitch + 0.4) +
     picks.under +
-    paths.stroke(stretch, shade(weave.warpColour, 0.12), pitch + 0.2, oneEnd) +
+    strokeEnds(stretch, pitch + 0.2, weave) +
     drawSelvedge(rows, pitch, shape.colour, weave) +
     picks.over
   );

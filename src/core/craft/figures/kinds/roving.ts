@@ -9,7 +9,8 @@ import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/k
 import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
 
-const WARP: WarpLines = { x: 52, step: 38, count: 13, top: 8, bottom: 238 };
+/** Twelve ends divide by every number of ends that is shown. */
+const WARP: WarpLines = { x: 66, step: 39, count: 12, top: 8, bottom: 238 };
 const Y = 140;
 const THICK = 32;
 
@@ -23,12 +24,13 @@ export const ROVING: Figure = {
   draw: (scene, input, progress) => {
     const { over, bulgeMm } = rovingOf(input);
     layWarp(scene, WARP, warpColour(input));
-    layField(scene, WARP, { colour: roleColour(input, bandOf(input, 'tabby')?.yarn, '#93a8a6'), width: 12.5, bottom: 222, pitch: 17, rows: 3, first: 0, last: 12, out: 18 });
+    layField(scene, WARP, { colour: roleColour(input, bandOf(input, 'tabby')?.yarn, '#93a8a6'), width: 12.5, bottom: 222, pitch: 17, rows: 3, first: 0, last: 11, out: 18 });
     layStrand(scene, { colour: techniqueColour(input, 'roving'), width: THICK, runs: rovingRuns(over) }, progress);
     if (progress < 1) return;
     words(scene, endX(WARP, (over - 1) / 2), 62, `over ${over}`, { anchor: 'middle', patch: true });
     words(scene, endX(WARP, over + (over - 1) / 2), 62, `under ${over}`, { anchor: 'middle', patch: true });
-    measureBeside(scene, { x: 536, y: Y }, { x: 536, y: Y - 38 }, lengthWords(bulgeMm, input.units, 'fine'), { x: 546, y: Y - 52 }, 'end');
+    const bulge = endX(WARP, over * 2 + (over - 1) / 2) + 8 + 20 * over;
+    measureBeside(scene, { x: bulge, y: Y }, { x: bulge, y: Y - 38 }, lengthWords(bulgeMm, input.units, 'fine'), { x: bulge + 14, y: Y - 30 });
   },
 };
 
