@@ -1,4 +1,4 @@
-import { fail, succeed, type Outcome } from '../outcome.ts';
+import { fail, succeed, type Outcome } from '#core/outcome.ts';
 import { currencySign, minorDigits, minorPerMajor, type Currency } from './currency.ts';
 import { formatPrice } from './format-price.ts';
 import { money, type Money } from './money.ts';

@@ -64,5 +64,5 @@ function open(): Sequelize {
 
 // The development server loads server modules anew after an edit; the pool must survive that.
 const KEY = Symbol.for('fellmark.sequelize');
-const shared = globalThis as typeof globalThis & { [KEY]?: Sequelize };
+const shared = globalThis as { [KEY]?: Sequelize | undefined };
 export const sequelize: Sequelize = (shared[KEY] ??= open());

@@ -13,5 +13,5 @@ export interface Template<S extends z.ZodTypeAny> {
 }
 
 export function defineTemplate<S extends z.ZodTypeAny>(template: { data: S; write(data: z.output<S>, site: Site): Letter }): Template<S> {
-  return { data: template.data, compose: (stored, site) => template.write(template.data.parse(stored), site) };
+  return { data: template.data, compose: (stored, site) => template.write(template.data.parse(stored) as z.output<S>, site) };
 }

@@ -44,7 +44,7 @@ export function fieldSentences(error: z.ZodError): Record<string, string> {
  * Parses a form by `schema`, hands it to `work`, and turns refusals into an answer that keeps what was typed.
  * Errors that no change of the form would cure (not found, forbidden) become `refused`; bugs pass through.
  */
-export async function answerForm<S extends z.ZodTypeAny>(schema: S, form: FormData, work: (input: z.output<S>) => Promise<{ to: string; said?: string }>): Promise<FormAnswer> {
+export async function answerForm<T>(schema: z.ZodType<T, z.ZodTypeDef, unknown>, form: FormData, work: (input: T) => Promise<{ to: string; said?: string }>): Promise<FormAnswer> {
   const typed = typedValues(form);
   const values = Object.fromEntries(Object.entries(typed).filter(([name]) => !SECRET.test(name)));
   const parsed: z.SafeParseReturnType<unknown, z.output<S>> = schema.safeParse(typed);

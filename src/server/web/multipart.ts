@@ -67,11 +67,12 @@ async function receive(request: Request, path: string, limits: MultipartLimits):
     source.once('error', reject);
     upload(source, {} as Parameters<typeof upload>[1], (error?: unknown) => {
       if (error === undefined || error === null) resolve();
-      else reject(error instanceof Error ? error : new Error(String(error)));
+      else reject(error instanceof Error ? error : new Error('The upload could not be read.', { cause: error }));
     });
   }).catch((error: unknown) => { throw asAppError(error, limits); });
-  const { body, file } = source;
-  const fields = Object.fromEntries(Object.entries((body ?? {}) as Record<string, unknown>).filter((entry): entry is [string, string] => typeof entry[1] === 'string'));
+  const { file } = source;
+  const body: unknown = source.body;
+  const fields = Object.fromEntries(Object.entries(body ?? {}).filter((entry): entry is [string, string] => typeof entry[1] === 'string'));
   return { fields, file: file === undefined ? null : { path: file.path, originalName: file.originalname, byteCount: file.size, contentType: file.mimetype } };
 }
 

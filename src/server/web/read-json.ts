@@ -6,7 +6,7 @@ import { fieldSentences } from '#server/web/form.ts';
 const MOST_BYTES = 64 * 1_024;
 
 /** @throws TOO_LARGE beyond 64 KiB; VALIDATION for what is no JSON or does not fit, by field. */
-export async function readJson<S extends z.ZodTypeAny>(request: Request, schema: S): Promise<z.output<S>> {
+export async function readJson<T>(request: Request, schema: z.ZodType<T, z.ZodTypeDef, unknown>): Promise<T> {
   const text = await request.text();
   if (Buffer.byteLength(text) > MOST_BYTES) throw new AppError('TOO_LARGE', { says: 'At most 64 KiB work here.' });
   let data: unknown;

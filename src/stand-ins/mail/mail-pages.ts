@@ -1,6 +1,6 @@
-import { Html, html, linkified } from '../html.ts';
-import { jsonReply, pageReply, type Answerer } from '../http.ts';
-import { page, pagePolicy } from '../page.ts';
+import { Html, html, linkified } from '#stand-ins/html.ts';
+import { jsonReply, pageReply, type Answerer } from '#stand-ins/http.ts';
+import { page, pagePolicy } from '#stand-ins/page.ts';
 import type { CaughtMail, MailTray } from './mail-tray.ts';
 
 /** A mail's own markup: nothing runs, nothing is fetched, its links open beside it. */

@@ -1,7 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { simpleParser } from 'mailparser';
 import { z } from 'astro/zod';
-import { Journal } from '../journal.ts';
+import { Journal } from '#stand-ins/journal.ts';
 
 /** Oldest mails go when the tray is full. */
 const MOST_MAILS = 500;

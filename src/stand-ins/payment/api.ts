@@ -1,5 +1,5 @@
 import { setTimeout as wait } from 'node:timers/promises';
-import type { Answer, Answerer, Asked } from '../http.ts';
+import type { Answer, Answerer, Asked } from '#stand-ins/http.ts';
 import { ApiError } from './api-error.ts';
 import type { ApiFault, ApiFaults } from './api-faults.ts';
 import type { ApiRoute } from './api-routes.ts';

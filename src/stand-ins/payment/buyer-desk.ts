@@ -180,7 +180,7 @@ export class BuyerDesk {
   ): Stripe.Charge {
     const id = newId(paidWith.kind === 'card' ? 'ch' : 'py');
     const transactionId = status === 'succeeded' ? this.#bookIn(id, intent.amount, intent.currency, 'charge') : null;
-    const methodId = intent.payment_method === null ? newId('pm') : String(intent.payment_method);
+    const methodId = typeof intent.payment_method === 'string' ? intent.payment_method : (intent.payment_method?.id ?? newId('pm'));
     const receiptUrl = `https://receipts.example/${id}`;
     const charge = newCharge({ id, created: this.#clock.now(), intent, buyer, paidWith, methodId, status, refusal, transactionId, receiptUrl });
     this.#state.charges.put({ id, charge, refunds: paidWith.kind === 'account' ? 'later' : (refunds ?? 'at-once') });

@@ -1,8 +1,8 @@
 import { badParameter } from './api-error.ts';
 
 /** A decoded form: texts, lists and groups of them. */
-export type FormValue = string | FormValue[] | { [name: string]: FormValue };
-export type FormGroup = { [name: string]: FormValue };
+export type FormValue = string | FormValue[] | FormGroup;
+export interface FormGroup { [name: string]: FormValue }
 
 const DEEPEST = 8;
 const LONGEST_LIST = 200;

@@ -1,12 +1,12 @@
 import { z } from 'astro/zod';
-import { ApiError, badParameter } from './api-error.ts';
+import { badParameter, type ApiError } from './api-error.ts';
 import type { FormGroup } from './form-body.ts';
 
 /**
  * Reads a request's parameters by a schema and refuses as the service does: unknown, missing and unreadable ones each have
  * their code, and the parameter is named in its bracketed form.
  */
-export function readParameters<S extends z.ZodTypeAny>(form: FormGroup, schema: S): z.output<S> {
+export function readParameters<T>(form: FormGroup, schema: z.ZodType<T, z.ZodTypeDef, unknown>): T {
   const parsed = schema.safeParse(form);
   if (parsed.success) return parsed.data;
   throw errorFor(parsed.error);
@@ -20,7 +20,7 @@ function bracketed(path: readonly (string | number)[]): string {
 
 function errorFor(error: z.ZodError): ApiError {
   const unknown = error.issues.find((issue) => issue.code === 'unrecognized_keys');
-  if (unknown && unknown.code === 'unrecognized_keys') {
+  if (unknown !== undefined) {
     const param = bracketed([...unknown.path, unknown.keys[0] ?? '']);
     return badParameter(param, `Received unknown parameter: ${param}`, 'parameter_unknown');
   }

@@ -1,5 +1,5 @@
-import { pageReply, seeOther, type Answerer, type Asked, type Reply } from '../http.ts';
-import { pagePolicy } from '../page.ts';
+import { pageReply, seeOther, type Answerer, type Asked, type Reply } from '#stand-ins/http.ts';
+import { pagePolicy } from '#stand-ins/page.ts';
 import type { BuyerDesk, PayResult } from './buyer-desk.ts';
 import { buyerIn, emptyTyped, filledWith, readAccount, readCard, readTyped, wrongAddress, type Typed, type Wrong } from './pay-form.ts';
 import { bankPage, overPage, payPage, unknownPage } from './pay-page.ts';

@@ -1,7 +1,7 @@
 import { isCurrency } from '#core/money/currency.ts';
 import { formatPrice } from '#core/money/format-price.ts';
-import { html, type Html } from '../html.ts';
-import { page } from '../page.ts';
+import { html, type Html } from '#stand-ins/html.ts';
+import { page } from '#stand-ins/page.ts';
 import { COUNTRIES, grouped, type Typed, type TypedField, type Wrong } from './pay-form.ts';
 import type { CheckoutRecord } from './payment-state.ts';
 import { OFTEN_USED, TEST_ACCOUNTS, TEST_CARDS, type TestCard } from './test-cards.ts';

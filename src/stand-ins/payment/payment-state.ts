@@ -1,5 +1,5 @@
 import type Stripe from 'stripe';
-import { Journal, type JournalLine } from '../journal.ts';
+import { Journal, type JournalLine } from '#stand-ins/journal.ts';
 import type { CardOutcome } from './test-cards.ts';
 
 /** A checkout with what the service knows of it but does not show. */
