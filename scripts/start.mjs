@@ -3,7 +3,7 @@
  * Starts all of Fellmark on this machine: `npm start`, or `npm run dev` with everything reloading as it is edited.
  * Begins with nothing but Node.js, so it imports no package.
  */
-import { existsSync, mkdirSync, readFileSync, rmSync, writeFileSync } from 'node:fs';
+import { existsSync, mkdirSync, readFileSync, writeFileSync } from 'node:fs';
 import net from 'node:net';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
@@ -87,22 +87,19 @@ async function start() {
   if (!development && buildIsStale(root)) await step('Build', () => buildSite(root));
 
   const secrets = secretsOf(settings.data);
-  const databaseFolder = path.join(settings.data, 'database');
-  const unfinished = path.join(settings.data, 'demo-world-unfinished');
-  // Ended while it was made, the demo world is begun anew: nobody has been on the site yet.
-  if (existsSync(unfinished)) rmSync(databaseFolder, { recursive: true, force: true });
-  if (settings.demo && settings.databaseUrl === undefined && !existsSync(databaseFolder)) writeFileSync(unfinished, '');
   const databaseUrl = settings.databaseUrl ?? await step('Database', async () => {
-    const server = await startDatabaseServer({ folder: databaseFolder, log: log('database'), password: secrets.databasePassword, durable: true });
+    const server = await startDatabaseServer({ folder: path.join(settings.data, 'database'), log: log('database'), password: secrets.databasePassword, durable: true });
     children.watch({ name: 'The database', log: server.log, process: server.child });
     return server.url;
   });
-  if (existsSync(unfinished) && settings.demoPassword !== undefined) secrets.save({ demoPassword: settings.demoPassword });
+  // A world that is made already keeps the password it was made with.
+  const worldMade = path.join(settings.data, 'demo-world-made');
+  if (!existsSync(worldMade) && settings.demoPassword !== undefined) secrets.save({ demoPassword: settings.demoPassword });
   const env = environmentOf(settings, secrets, databaseUrl);
   await step('Tables', () => runOnce('migrate', 'Bringing the tables up to date', env));
   if (settings.demo) {
     await step('Demo world', () => runOnce('seed', 'Making the demo world', env));
-    rmSync(unfinished, { force: true });
+    writeFileSync(worldMade, '');
     await step('Stand-ins for payment and post', async () => {
       children.start({ name: 'The stand-ins', log: log('stand-ins'), command: commandOf('stand-ins', true), env, cwd: root });
       await until('The stand-ins', log('stand-ins'), () => listens(settings.port + 1));

@@ -47,7 +47,7 @@ export function fieldSentences(error: z.ZodError): Record<string, string> {
 export async function answerForm<T>(schema: z.ZodType<T, z.ZodTypeDef, unknown>, form: FormData, work: (input: T) => Promise<{ to: string; said?: string }>): Promise<FormAnswer> {
   const typed = typedValues(form);
   const values = Object.fromEntries(Object.entries(typed).filter(([name]) => !SECRET.test(name)));
-  const parsed: z.SafeParseReturnType<unknown, z.output<S>> = schema.safeParse(typed);
+  const parsed = schema.safeParse(typed);
   if (!parsed.success) return { ok: false, status: 422, summary: '', fields: fieldSentences(parsed.error), values };
   try {
     return { ok: true, ...(await work(parsed.data)) };
