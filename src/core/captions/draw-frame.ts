@@ -57,17 +57,25 @@ function warpEnds(): string {
 
 function growing(as: 'loom' | 'hanging', progress: number, input: FigureInput): string {
   const piece = clothPieceOf(input.piece, input.plan, '');
-  const width = as === 'loom' ? 330 : 270;
-  return drawCloth(piece, { id: 'cloth', as, width, woven: progress, decorative: true });
+  const draw = (width: number): string => drawCloth(piece, { id: 'cloth', as, width, woven: progress, decorative: true });
+  /* Drawn again at the size it is shown at: threads scaled afterwards would blur into bands. */
+  const { width, height } = sizeOf(draw(TRIAL_WIDTH));
+  return draw(Math.floor(width * Math.min(ROOM.width / width, ROOM.height / height)));
+}
+
+const TRIAL_WIDTH = 300;
+
+function sizeOf(svg: string): { width: number; height: number } {
+  const [, width = '1', height = '1'] = / width="([\d.]+)" height="([\d.]+)"/.exec(svg) ?? [];
+  return { width: Number(width), height: Number(height) };
 }
 
 /** Our own drawing as a part of a larger one: as large as fits, in the middle. */
 function fitInto(svg: string, room: Box): string {
-  const size = / width="([\d.]+)" height="([\d.]+)"/.exec(svg);
-  const [, width = '1', height = '1'] = size ?? [];
-  const scale = Math.min(room.width / Number(width), room.height / Number(height));
-  const w = Number(width) * scale;
-  const h = Number(height) * scale;
+  const { width, height } = sizeOf(svg);
+  const scale = Math.min(room.width / width, room.height / height);
+  const w = width * scale;
+  const h = height * scale;
   const place = ` x="${num(room.x + (room.width - w) / 2)}" y="${num(room.y + (room.height - h) / 2)}" width="${num(w)}" height="${num(h)}"`;
   return svg.replace(/ width="[\d.]+" height="[\d.]+"/, place);
 }

@@ -20,7 +20,7 @@ export const WEDGE: Figure = {
   title: 'Wedge and valley',
   height: 272,
   describe: () =>
-    'A dune is woven first, by itself. Every two rows it gives up one end, first at one side and then at the other, so its edges climb like stairs. The valleys beside it are filled afterwards.',
+    'A dune is woven first, by itself. Every few rows it gives up one end, first at one side and then at the other, so its edges climb like stairs. The valleys beside it are filled afterwards.',
   draw: (scene, input, progress) => {
     const { ground, first } = shapeColours(input);
     const [dune, right, left] = stages(progress, [5, 3, 2] as const);
@@ -31,7 +31,7 @@ export const WEDGE: Figure = {
     if (dune >= 1) numeral(scene, WARP.x + 6 * WARP.step, 188, 1);
     if (right >= 1) numeral(scene, WARP.x + 10.6 * WARP.step, 84, 2);
     if (left >= 1) numeral(scene, WARP.x + 1.4 * WARP.step, 84, 3);
-    if (dune > 0 && dune < 1) words(scene, 280, 24, 'turn one end earlier, every two rows', { anchor: 'middle', patch: true, size: 17 });
+    if (dune > 0 && dune < 1) words(scene, 280, 24, 'every few rows turn one end earlier', { anchor: 'middle', patch: true, size: 17 });
   },
 };
 
