@@ -8,13 +8,17 @@ import net from 'node:net';
 import os from 'node:os';
 import path from 'node:path';
 import { fileURLToPath } from 'node:url';
+import { signEverybodyIn } from './demo-people.ts';
 
 const root = fileURLToPath(new URL('../../..', import.meta.url));
 const READY_MS = 300_000;
 const PASSWORD = 'a-password-of-the-tests';
 
 export default async function startSite(): Promise<(() => Promise<void>) | undefined> {
-  if (process.env['FELLMARK_TEST_URL'] !== undefined) return undefined;
+  if (process.env['FELLMARK_TEST_URL'] !== undefined) {
+    await signEverybodyIn();
+    return undefined;
+  }
   const folder = await mkdtemp(path.join(os.tmpdir(), 'fellmark-site-'));
   const port = await freeBlock();
   const site = spawn(process.execPath, ['scripts/start.mjs'], {
@@ -47,6 +51,7 @@ export default async function startSite(): Promise<(() => Promise<void>) | undef
     FELLMARK_TEST_STAND_INS: `http://127.0.0.1:${port + 1}`,
     FELLMARK_TEST_PASSWORD: PASSWORD,
   });
+  await signEverybodyIn();
   return async () => {
     site.kill('SIGTERM');
     await ended;
