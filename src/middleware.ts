@@ -16,7 +16,7 @@ import type { FormAnswer } from '#server/web/form.ts';
 import { gate } from '#server/web/gate.ts';
 import { comesFromOwnPages, ownOrigins } from '#server/web/origin.ts';
 import { cacheRule, completePolicy } from '#server/web/page-headers.ts';
-import { knownError, problem } from '#server/web/respond.ts';
+import { knownError, problem, wantsPage } from '#server/web/respond.ts';
 import { ROUTE_RULES } from '#server/web/route-rules.ts';
 import { saidCookie } from '#server/web/said.ts';
 
@@ -27,7 +27,7 @@ export const onRequest = defineMiddleware(async (context, next) => {
   if (locals.refusal !== undefined) return next();
   const requestId = randomUUID();
   const rule = ROUTE_RULES[context.routePattern];
-  const isApi = context.routePattern.startsWith('/api/');
+  const isApi = context.routePattern.startsWith('/api/') && !wantsPage(request);
   try {
     if (rule !== 'machine' && !comesFromOwnPages(request.method, request.headers, ownOrigins(config().publicUrl, config().demo))) {
       throw new AppError('FORBIDDEN', { says: 'This form was sent from another site, so nothing was done. Open the page here and send it again.' });
@@ -103,11 +103,19 @@ function withHeaders(response: Response, signedIn: boolean): Response {
   return response;
 }
 
+/** The page a form stands on. One that is sent to an endpoint is told by its referrer; else she begins at her loom. */
+function pageOfForm({ routePattern, url, request }: APIContext): string {
+  if (!routePattern.startsWith('/api/')) return url.pathname;
+  const referrer = request.headers.get('referer') ?? '';
+  const from = URL.canParse(referrer) ? new URL(referrer) : null;
+  return from?.host === url.host ? from.pathname : '/loom';
+}
+
 async function pageForError(context: APIContext, error: unknown, requestId: string): Promise<Response> {
   const known = knownError(error);
   if (known.code === 'UNAUTHENTICATED' || known.code === 'PROOF_NEEDED') {
     // A form's own page is where its action stands; the name of the action itself is not come back to.
-    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : context.url.pathname;
+    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : pageOfForm(context);
     return context.redirect(`${known.code === 'UNAUTHENTICATED' ? '/sign-in' : '/prove'}?to=${encodeURIComponent(back)}`, 303);
   }
   // An empty 404 makes Astro show its 404 page.

@@ -28,13 +28,13 @@ export interface ShownFor {
   /** The teacher's own yarns, to say which of them the student's stands for. */
   readonly pattern: Piece | null;
   readonly units: Units;
-  /** False in the list of a single part, where everybody knows which it is. */
-  readonly tellParts: boolean;
+  /** The list of a whole series, to shop by; else that of one part, beside its text, where room is short. */
+  readonly wholeSeries: boolean;
 }
 
 /** One line for each thing. Yarn comes first, then tools, then what else is needed. */
 export function gatherRows(lines: readonly GatheringLine[], shownFor: ShownFor): ShownLine[] {
-  const merged = mergeLines(shownFor.tellParts ? asWholeYarns(lines, shownFor.pattern) : lines);
+  const merged = mergeLines(shownFor.wholeSeries ? asWholeYarns(lines, shownFor.pattern) : lines);
   const order = ['yarn', 'tool', 'material'] as const;
   return order.flatMap((kind) => merged.filter((line) => line.kind === kind).map((line) => rowOf(line, shownFor)));
 }
@@ -79,9 +79,9 @@ function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
     colour: line.kind === 'yarn' ? yarn?.colour : undefined,
     amount: amountIn(line, made, units),
     also: line.kind === 'yarn' ? weightWords(line, role, made, units) : '',
-    when: shownFor.tellParts ? partsWords(line.parts, line.untilPart) : '',
+    when: shownFor.wholeSeries ? partsWords(line.parts, line.untilPart) : '',
     note: line.note ?? '',
-    standIn: isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
+    standIn: !shownFor.wholeSeries || isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
   };
 }
 

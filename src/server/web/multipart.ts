@@ -20,8 +20,11 @@ export interface ReceivedFile {
 }
 
 export interface ReceivedForm {
+  /** Those that came before the file, when it was not taken. */
   readonly fields: Readonly<Record<string, string>>;
   readonly file: ReceivedFile | null;
+  /** Why the file was not taken; null when it was, or when there was none. */
+  readonly fault: AppError | null;
 }
 
 export interface MultipartLimits {
@@ -36,7 +39,7 @@ const FIELDS = { fields: 20, fieldSize: 16 * 1_024, fieldNameSize: 100, headerPa
 
 /**
  * Hands the form to `work`, then removes the file.
- * @throws TOO_LARGE, VALIDATION; what `work` throws.
+ * @throws VALIDATION for what is no such form; what `work` throws.
  */
 export async function withMultipart<T>(request: Request, store: MediaStore, limits: MultipartLimits, work: (form: ReceivedForm) => Promise<T>): Promise<T> {
   const path = await store.temporaryPath(`upload-${randomUUID()}`);
@@ -63,17 +66,17 @@ async function receive(request: Request, path: string, limits: MultipartLimits):
     headers: Object.fromEntries(request.headers),
     method: request.method,
   }) as unknown as MulterRequest;
-  await new Promise<void>((resolve, reject) => {
+  const fault = await new Promise<void>((resolve, reject) => {
     source.once('error', reject);
     upload(source, {} as Parameters<typeof upload>[1], (error?: unknown) => {
       if (error === undefined || error === null) resolve();
       else reject(error instanceof Error ? error : new Error('The upload could not be read.', { cause: error }));
     });
-  }).catch((error: unknown) => { throw asAppError(error, limits); });
+  }).then(() => null, (error: unknown) => asAppError(error, limits));
   const { file } = source;
   const body: unknown = source.body;
   const fields = Object.fromEntries(Object.entries(body ?? {}).filter((entry): entry is [string, string] => typeof entry[1] === 'string'));
-  return { fields, file: file === undefined ? null : { path: file.path, originalName: file.originalname, byteCount: file.size, contentType: file.mimetype } };
+  return { fields, fault, file: fault !== null || file === undefined ? null : { path: file.path, originalName: file.originalname, byteCount: file.size, contentType: file.mimetype } };
 }
 
 function asAppError(error: unknown, limits: MultipartLimits): AppError {

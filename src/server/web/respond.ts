@@ -42,3 +42,8 @@ export async function answering(requestId: string, work: () => Promise<Response>
     return problem(error, requestId);
   }
 }
+
+/** Whether a browser asks by a link or form of its own, and must be shown a page; programs and islands take JSON. */
+export function wantsPage(request: Request): boolean {
+  return (request.headers.get('accept') ?? '').includes('text/html');
+}

@@ -26,6 +26,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/reckon': 'machine',
   '/api/ticks': 'signed-in',
   '/media/[id]/[file]': 'public',
+  '/series/[slug]/[part]': 'public',
   '/sign-in': 'public',
   '/sign-up': 'public',
   '/sign-out': 'public',

@@ -1,17 +1,37 @@
-import type { APIRoute } from 'astro';
+import type { APIContext, APIRoute } from 'astro';
+import { AppError } from '#server/errors.ts';
 import { PHOTO_LIMITS } from '#server/media/photo.ts';
 import { postPhoto } from '#server/use-cases/photos/post-photo.ts';
-import { AppError } from '#server/errors.ts';
-import { withMultipart } from '#server/web/multipart.ts';
-import { answering, json } from '#server/web/respond.ts';
+import { withMultipart, type ReceivedForm } from '#server/web/multipart.ts';
+import { photoFaultCookie, writePhotoFault } from '#server/web/photo-fault.ts';
+import { answering, json, knownError, wantsPage } from '#server/web/respond.ts';
 
 const TOO_LARGE = 'This photo is larger than 25 MB. Send it smaller: most phones ask for a size when they share a picture.';
+const LIMITS = { field: 'photo', maxBytes: PHOTO_LIMITS.maxBytes, tooLargeSays: TOO_LARGE };
 
-/** Takes a progress photo. A browser without JavaScript is sent back to the part; an island gets JSON. */
-export const POST: APIRoute = ({ request, locals: { ctx }, redirect }) =>
-  answering(ctx.requestId, () => withMultipart(request, ctx.services.media, { field: 'photo', maxBytes: PHOTO_LIMITS.maxBytes, tooLargeSays: TOO_LARGE }, async ({ fields, file }) => {
-    const { series = '', lesson = '', words = '', back = '' } = fields;
+/**
+ * Takes a progress photo. An island gets JSON. A browser without JavaScript names the part in `back` and is sent back
+ * there, with the sentence and its words when the photo was not taken.
+ */
+export const POST: APIRoute = (context) => {
+  const { request, locals: { ctx } } = context;
+  const work = (): Promise<Response> => withMultipart(request, ctx.services.media, LIMITS, (form) => takeFrom(form, context));
+  return wantsPage(request) ? work() : answering(ctx.requestId, work);
+};
+
+async function takeFrom({ fields, file, fault }: ReceivedForm, context: APIContext): Promise<Response> {
+  const { series = '', lesson = '', words = '', back = '' } = fields;
+  const toPart = /^[1-9][0-9]?$/.test(back) && /^[a-z0-9-]{1,64}$/.test(series) ? `/series/${series}/${back}#checkpoint` : null;
+  try {
+    if (fault !== null) throw fault;
     if (file === null) throw new AppError('VALIDATION', { says: 'No photo came with this form. Choose one and send it again.' });
-    const photo = await postPhoto(ctx, { series, lesson, words, path: file.path, originalName: file.originalName });
-    return /^[1-9][0-9]?$/.test(back) ? redirect(`/series/${series}/${back}#checkpoint`, 303) : json({ photo: photo.publicId }, 201);
-  }));
+    const photo = await postPhoto(context.locals.ctx, { series, lesson, words, path: file.path, originalName: file.originalName });
+    return toPart === null ? json({ photo: photo.publicId }, 201) : context.redirect(toPart, 303);
+  } catch (error) {
+    const known = knownError(error);
+    if (toPart === null || known.code === 'BUG') throw error;
+    const { name, options } = photoFaultCookie();
+    context.cookies.set(name, writePhotoFault({ says: known.says, words }), options);
+    return context.redirect(toPart, 303);
+  }
+}

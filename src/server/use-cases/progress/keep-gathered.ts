@@ -2,7 +2,7 @@ import type { GatheredInput } from '#contracts/following.ts';
 import type { Context } from '#server/context.ts';
 import { authorize, found } from '#server/errors.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
-import { requireItemsOf, writeTicks } from './write-ticks.ts';
+import { requireItemsOf, writeTicks } from './_write-ticks.ts';
 
 /**
  * Keeps a whole gathering list at once, as a form without JavaScript sends it: every line that she changed.

@@ -6,7 +6,7 @@ import { withTransaction } from '#server/db/transaction.ts';
 import { authorize, found } from '#server/errors.ts';
 import { mayRead } from '#server/policies/lesson.ts';
 import { seriesFor, type PartFor } from '#server/queries/series/series-for.ts';
-import { requireItemsOf, writeTicks } from './write-ticks.ts';
+import { requireItemsOf, writeTicks } from './_write-ticks.ts';
 
 /**
  * Ticks gathered things or a step, or takes the tick back. When two devices disagree the later change wins, by the

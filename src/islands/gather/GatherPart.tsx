@@ -1,0 +1,33 @@
+import type { ShownLine } from '#core/gathering/rows.ts';
+import { useTicks } from '#islands/ticks/use-ticks.ts';
+import { GatherRows } from './GatherRows.tsx';
+import { KeptHere } from './KeptHere.tsx';
+
+interface GatherPartProps {
+  seat: string;
+  series: string;
+  part: number;
+  lines: readonly ShownLine[];
+  /** Where the list goes without script. */
+  action: string;
+}
+
+/** What one part needs, beside its text. */
+export function GatherPart({ seat, series, part, lines, action }: GatherPartProps) {
+  const ticks = useTicks(seat, series, lines);
+  const had = lines.filter(({ key }) => ticks.isTicked(key)).length;
+  return (
+    <form method="post" action={action} aria-labelledby="gather-title">
+      <input type="hidden" name="series" value={series} />
+      <div className="row between">
+        <h2 className="h3" id="gather-title">Gather for Part {part}</h2>
+        <span className="small quiet num">{had} of {lines.length}</span>
+      </div>
+      <KeptHere queue={ticks.queue} />
+      <div className="lined">
+        <GatherRows lines={lines} ticks={ticks} />
+      </div>
+      <noscript><button className="btn btn-wide" type="submit">Keep my ticks</button></noscript>
+    </form>
+  );
+}

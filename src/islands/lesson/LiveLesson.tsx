@@ -1,0 +1,59 @@
+import { useEffect, useState } from 'react';
+import { tickQueue } from '#islands/ticks/browser-queue.ts';
+import { markStep, moveHere, stepOf, tickedNow } from './step-marks.ts';
+
+interface LiveLessonProps {
+  seat: string;
+  series: string;
+  lesson: string;
+}
+
+/**
+ * Takes over what the page under it can do by itself: the small forms of the steps answer at once, and a chapter of a
+ * video begins in its place. Draws nothing but the words that say where a tick is kept.
+ */
+export function LiveLesson({ seat, series, lesson }: LiveLessonProps) {
+  const [words, setWords] = useState('');
+  useEffect(() => {
+    const queue = tickQueue(seat);
+    for (const [id, ticked] of queue.kept()) if (id.startsWith('step ')) markStep(id.slice(5), ticked);
+    moveHere();
+    const onSubmit = (event: SubmitEvent): void => {
+      const step = event.target instanceof HTMLFormElement ? stepOf(event.target) : undefined;
+      if (step === undefined) return;
+      event.preventDefault();
+      const ticked = !tickedNow(step);
+      markStep(step, ticked);
+      moveHere();
+      queue.put({ id: `step ${step}`, body: { subject: 'step', series, lesson, item: step, ticked, changedAt: new Date().toISOString() } });
+    };
+    const onQueue = (): void => {
+      const { unsent, waits, refused } = queue.current();
+      for (const id of refused) if (id.startsWith('step ')) markStep(id.slice(5), !tickedNow(id.slice(5)));
+      setWords(refused.size > 0 ? 'This step was not ticked: the part is not open to you any more. Load the page again.' : unsent.size > 0 && waits !== 'nothing' ? 'Kept on this device. It goes out when there is signal.' : '');
+    };
+    const stop = queue.subscribe(onQueue);
+    document.addEventListener('submit', onSubmit);
+    document.addEventListener('click', beginChapter);
+    void queue.flush();
+    return () => {
+      stop();
+      document.removeEventListener('submit', onSubmit);
+      document.removeEventListener('click', beginChapter);
+    };
+  }, [seat, series, lesson]);
+  return <p className="kept-steps small" role="status">{words}</p>;
+}
+
+/** A chapter's link leads to the file at its time; with script the video above goes there instead. */
+function beginChapter(event: MouseEvent): void {
+  const link = event.target instanceof Element ? event.target.closest<HTMLAnchorElement>('.lesson-video .chapter-list a') : null;
+  const video = link?.closest('.lesson-video')?.querySelector('video');
+  const at = /#t=(\d+)$/.exec(link?.href ?? '')?.[1];
+  if (!(video instanceof HTMLVideoElement) || at === undefined) return;
+  event.preventDefault();
+  video.currentTime = Number(at);
+  // Refused where the browser wants a press on the video itself: it stands at the place all the same.
+  void video.play().catch(() => undefined);
+  video.focus();
+}

@@ -1,0 +1,56 @@
+import { useCallback, useEffect, useReducer, useRef } from 'react';
+import { photoFault } from './photo-rules.ts';
+import { uploadAfter, type UploadState } from './upload-state.ts';
+import type { StartUpload, Upload } from './uploader.ts';
+
+/** Between tries while there is no signal: 4 s, 8 s, 16 s, then every 30 s. */
+const waitMs = (tries: number): number => Math.min(30_000, 2_000 * 2 ** tries);
+
+export interface PhotoOnItsWay {
+  readonly state: UploadState;
+  readonly choose: (file: File | undefined) => void;
+  readonly send: (fields: Readonly<Record<string, string>>) => void;
+  readonly stop: () => void;
+  readonly putAway: () => void;
+}
+
+export function useUpload(start: StartUpload, fault: string | undefined): PhotoOnItsWay {
+  const [state, tell] = useReducer(uploadAfter, { at: 'choosing', fault });
+  const upload = useRef<Upload | null>(null);
+  const end = useCallback(() => {
+    upload.current?.stop();
+    upload.current = null;
+  }, []);
+  useEffect(() => end, [end]);
+
+  const tries = state.at === 'waiting' ? state.tries : 0;
+  useEffect(() => {
+    if (tries === 0) return;
+    const again = (): void => { upload.current?.again(); };
+    const timer = setTimeout(again, waitMs(tries));
+    window.addEventListener('online', again);
+    return () => {
+      clearTimeout(timer);
+      window.removeEventListener('online', again);
+    };
+  }, [tries]);
+
+  const choose = useCallback((file: File | undefined) => {
+    if (file === undefined) return;
+    const says = photoFault(file);
+    tell(says === null ? { kind: 'choose', file } : { kind: 'unfit', says });
+  }, []);
+  const send = useCallback((fields: Readonly<Record<string, string>>) => {
+    if (!('file' in state)) return;
+    tell({ kind: 'send' });
+    void start(state.file, fields, {
+      progress: (sent) => { tell({ kind: 'progress', sent }); },
+      dropped: () => { tell({ kind: 'dropped' }); },
+      refused: (says) => { end(); tell({ kind: 'refused', says }); },
+      done: () => { tell({ kind: 'done' }); },
+    }).then((begun) => { upload.current = begun; }, () => { tell({ kind: 'refused', says: 'The photo could not be sent from here. Load the page again and send it once more.' }); });
+  }, [start, state, end]);
+  const stop = useCallback(() => { end(); tell({ kind: 'stop' }); }, [end]);
+  const putAway = useCallback(() => { end(); tell({ kind: 'put-away' }); }, [end]);
+  return { state, choose, send, stop, putAway };
+}
