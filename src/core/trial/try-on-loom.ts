@@ -13,8 +13,8 @@ export type Trial =
   /** Something typed cannot be used. */
   | { readonly ok: false; readonly fields: LoomFaults }
   | { readonly ok: true; readonly fits: true; readonly mine: MyPiece; readonly fitted: FittedPiece; readonly warnings: readonly Problem[]; readonly freeMm: number; readonly narrowed: boolean }
-  /** `widestMm` fits at this spacing; null when nothing worth weaving does. */
-  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widestMm: number | null };
+  /** `widest` is the piece as wide as the loom allows at this spacing; null when nothing worth weaving fits. */
+  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widest: FittedPiece | null };
 
 /** Narrower than this nobody would call it the same piece. */
 const LEAST_WIDTH_MM = 80;
@@ -35,10 +35,10 @@ export function tryOnLoom(pattern: Piece, title: string, typed: TypedLoom): Tria
   const onLoom: MyPiece = { loom: read.loom, endsTogether: ends };
   const asPattern = fitPiece(pattern, onLoom, units);
   if (asPattern.ok) return fitting(onLoom, asPattern.value, asPattern.warnings, read.loom.insideWidthMm, false);
-  if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), widestMm: null };
+  if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), widest: null };
   const widest = widestThatFits(pattern, onLoom, units);
   if (typed.narrower && widest !== null) return fitting(widest.mine, widest.fitted, widest.warnings, read.loom.insideWidthMm, true);
-  return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.widthMm ?? null), widestMm: widest?.widthMm ?? null };
+  return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.mine.widthMm ?? null), widest: widest?.fitted ?? null };
 }
 
 function fitting(mine: MyPiece, fitted: FittedPiece, warnings: readonly Problem[], insideWidthMm: number, narrowed: boolean): Trial {
@@ -50,7 +50,6 @@ const isTooWide = (problems: readonly Problem[]): boolean => problems.every(({ c
 const sentences = (problems: readonly Problem[]): string => [...new Set(problems.map(({ message }) => message))].join(' ');
 
 interface Widest {
-  readonly widthMm: number;
   readonly mine: MyPiece;
   readonly fitted: FittedPiece;
   readonly warnings: readonly Problem[];
@@ -65,7 +64,7 @@ function widestThatFits(pattern: Piece, onLoom: MyPiece, units: Units): Widest |
   for (let steps = widest; steps > widest - STEPS && steps * step >= LEAST_WIDTH_MM; steps -= 1) {
     const mine: MyPiece = { ...onLoom, widthMm: steps * step };
     const fit = fitPiece(pattern, mine, units);
-    if (fit.ok) return { widthMm: steps * step, mine, fitted: fit.value, warnings: fit.warnings };
+    if (fit.ok) return { mine, fitted: fit.value, warnings: fit.warnings };
   }
   return null;
 }

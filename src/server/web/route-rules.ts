@@ -17,6 +17,12 @@ export type RouteRule =
 export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/handbook': 'public',
   '/handbook/[...slug]': 'public',
+  '/': 'public',
+  '/series': 'public',
+  '/series/[slug]': 'public',
+  '/series/[slug]/seat': 'signed-in',
+  '/teachers/[handle]': 'public',
+  '/api/seats/[slug]': 'signed-in',
   '/refused': 'public',
   '/404': 'public',
   '/500': 'public',

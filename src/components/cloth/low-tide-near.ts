@@ -1,4 +1,4 @@
-/** The cloth beside the door: a corner of a hanging seen close, so that single threads show. */
+/** A corner of a hanging seen close, so that single threads show: beside the door, at the shop front, on the way of a series. */
 import type { ClothShape, TabbyBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 
 const ENDS = 54;
@@ -21,7 +21,7 @@ function tabby(yarn: string, colour: string, heightMm: number, picks: number, sh
 }
 
 /** Half of it is woven; the rest is warp that waits, so that the cloth is high enough for a tall window. */
-export const DOOR_CLOTH: WovenPiece = {
+export const LOW_TIDE_NEAR: WovenPiece = {
   kind: 'woven', title: 'Low Tide at close range', thing: 'wall hanging', widthMm: 540, ends: ENDS, endsTogether: 1, warpColour: '#d8d2c1', seed: 17, turned: false, loom: undefined,
   bands: [
     tabby('Slack Water', SLACK_WATER, 60, 9),

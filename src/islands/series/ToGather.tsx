@@ -1,0 +1,69 @@
+/** Everything to gather for the piece as it is being tried: yarn by length and weight, then tools and what else. */
+import { amountOf } from '#core/craft/amounts.ts';
+import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import type { MergedLine } from '#core/gathering/merge.ts';
+import { yarnTable } from '#core/gathering/yarn-table.ts';
+import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+import type { Made } from '#islands/series/trial.ts';
+import { useTried } from '#islands/series/trial-store.ts';
+import { Parts } from '#islands/ui/Parts.tsx';
+import { YarnDot } from '#islands/ui/YarnDot.tsx';
+
+export interface ToGatherProps {
+  readonly made: Made;
+  readonly units: Units;
+  /** Reckoned for her own loom already: by what she typed, or by her own piece. */
+  readonly own: boolean;
+  readonly lines: readonly MergedLine[];
+}
+
+export function ToGather({ lines, ...given }: ToGatherProps) {
+  const { made, units, own } = useTried() ?? given;
+  const tools = lines.filter(({ kind }) => kind !== 'yarn');
+  const standIns = tools.filter(({ standIn }) => standIn !== null);
+  return (
+    <>
+      <p className="small quiet">{own ? 'For your' : 'For the pattern’s'} {amountText(lengthOf(made.piece.size.widthMm, 'size'), units)}, with a margin.</p>
+      <YarnRows made={made} units={units} />
+      <h3 className="mt-5">Tools and what else</h3>
+      <ul className="tools mt-2">
+        {tools.map((line) => <li key={line.publicIds.join()}><span>{line.name}</span><span className="num small quiet"><HowMuch line={line} made={made} units={units} /></span></li>)}
+      </ul>
+      {standIns.length > 0 && (
+        <details className="stand-ins mt-3">
+          <summary>What can stand in for what</summary>
+          <dl className="lined small">{standIns.map((line) => <div key={line.publicIds.join()}><dt>{line.name}</dt><dd>{line.standIn}</dd></div>)}</dl>
+        </details>
+      )}
+    </>
+  );
+}
+
+function YarnRows({ made: { piece, plan }, units }: { readonly made: Made; readonly units: Units }) {
+  const { lines, grams } = yarnTable(piece, plan);
+  return (
+    <div className="scrolls" tabIndex={0} role="region" aria-label="Yarn to gather">
+      <table className="table mt-2">
+        <caption className="hide">Yarn to gather</caption>
+        <thead><tr><th scope="col">Yarn</th><th scope="col" className="num">Length</th><th scope="col" className="num">Weight</th></tr></thead>
+        <tbody>
+          {lines.map(({ name, detail, colour, lengthMm, grams: weight }) => (
+            <tr key={`${name} ${detail} ${colour ?? ''}`}>
+              <th scope="row" className="yarn-name"><YarnDot colour={colour} />{name}{detail !== '' && <span className="quiet"> {detail}</span>}</th>
+              <td className="num"><Parts parts={formatAmount(lengthOf(lengthMm, 'yarn'), units)} /></td>
+              <td className="num"><Parts parts={formatAmount(massOf(weight), units)} /></td>
+            </tr>
+          ))}
+        </tbody>
+        <tfoot><tr><th scope="row">Warp and weft together</th><td /><td className="num"><Parts parts={formatAmount(massOf(grams), units)} /></td></tr></tfoot>
+      </table>
+    </div>
+  );
+}
+
+function HowMuch({ line: { amountKey, amountText: words }, made: { piece, plan }, units }: { readonly line: MergedLine; readonly made: Made; readonly units: Units }) {
+  const amount = amountKey === null ? null : amountOf(amountKey, piece, plan);
+  const parts: readonly AmountPart[] = amount?.ok === true ? formatAmount(amount.value, units) : [{ kind: 'text', text: words ?? '' }];
+  return <Parts parts={parts} />;
+}

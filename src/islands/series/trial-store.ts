@@ -1,0 +1,29 @@
+/** What is being tried on this page, shared by its islands: one changes it, the list to gather follows. */
+import { useSyncExternalStore } from 'react';
+import type { Units } from '#core/units/units.ts';
+import type { Made } from '#islands/series/trial.ts';
+
+export interface Tried {
+  readonly made: Made;
+  readonly units: Units;
+  /** Reckoned for a loom that was typed, not for the pattern's own. */
+  readonly own: boolean;
+}
+
+let tried: Tried | null = null;
+const listeners = new Set<() => void>();
+
+export function setTried(next: Tried): void {
+  tried = next;
+  for (const listener of listeners) listener();
+}
+
+function subscribe(listener: () => void): () => void {
+  listeners.add(listener);
+  return () => { listeners.delete(listener); };
+}
+
+/** What was tried last in this browser; null until something was, and on the server. */
+export function useTried(): Tried | null {
+  return useSyncExternalStore(subscribe, () => tried, () => null);
+}
