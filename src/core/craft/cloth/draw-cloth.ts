@@ -18,6 +18,7 @@ import { layBands, type DrawnBands } from '#core/craft/cloth/lay-bands.ts';
 import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from '#core/craft/cloth/loom-frame.ts';
 import { PathStore, escapeWords, num } from '#core/craft/cloth/markup.ts';
 import { drawPlies } from '#core/craft/cloth/ply.ts';
+import { drawWarpFringe, warpFringeHeight } from '#core/craft/cloth/warp-fringe.ts';
 import type { Weave } from '#core/craft/cloth/weave.ts';
 
 interface Picture {
@@ -100,12 +101,23 @@ function hang(piece: WovenPiece, view: ClothView): Picture {
   const top = Math.max(16, view.width * 0.13);
   const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
   const at = top + 3;
+  const bare = wovenShare(view) >= 1 && !endsInPile(piece, weave);
+  const below = bare ? warpFringeHeight(weave) : pileBelow(piece, bands, weave);
+  const fringe = bare ? `<g transform="translate(${num(inset)} ${num(at + bands.height)})">${drawWarpFringe(weave)}</g>` : '';
   const body =
     drawCastShadow(inset, top, weave.width, bands.height) +
     drawDowel(view.width, inset * 0.1, top) +
     `<g transform="translate(${num(inset)} 0)">${drawEnds(top * 0.8, top + 4, weave)}</g>` +
+    fringe +
     `<g transform="translate(${num(inset)} ${num(at)})">${bands.markup}</g>`;
-  return { width: view.width, height: at + bands.height + pileBelow(piece, bands, weave) + 6, body, defs: defsOf(piece, weave, bands.clip) };
+  return { width: view.width, height: at + bands.height + below + 6, body, defs: defsOf(piece, weave, bands.clip) };
+}
+
+/** Whether pile hangs over the lower edge of the cloth, so that the ends of the warp are not seen. */
+function endsInPile(piece: WovenPiece, weave: Weave): boolean {
+  const solid = piece.bands.filter((band) => band.heightMm > 0);
+  const near = weave.begin === 'head' ? solid.slice(-3) : solid.slice(0, 3);
+  return near.some((band) => band.technique === 'rya');
 }
 
 /** How far the longest pile falls below the lower edge of the cloth. */

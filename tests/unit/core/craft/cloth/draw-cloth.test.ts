@@ -97,12 +97,21 @@ describe('a cloth that is still growing', () => {
 });
 
 describe('the ways up of a cloth', () => {
+  const hanging: ClothView = { id: 'a', as: 'hanging', width: 400 };
+  const px = (400 - 24) / 400;
+
   it('makes room below for pile that hangs past the foot', () => {
-    const view: ClothView = { id: 'a', as: 'hanging', width: 400 };
-    const plain = size(drawCloth(wovenPiece({ bands: [WEDGES] }), view));
-    const fringed = size(drawCloth(wovenPiece({ bands: [RYA, WEDGES] }), view));
-    const px = (400 - 24) / 400;
-    expect(fringed.height - plain.height).toBeGreaterThan((24 + 100) * px);
+    const short = size(drawCloth(wovenPiece({ bands: [{ ...RYA, pileMm: 60 }, WEDGES] }), hanging));
+    const long = size(drawCloth(wovenPiece({ bands: [{ ...RYA, pileMm: 160 }, WEDGES] }), hanging));
+    expect(long.height - short.height).toBeCloseTo(100 * px * 1.04, 0);
+  });
+
+  it('knots the ends of the warp below a foot without pile, once the piece is woven', () => {
+    const bare = wovenPiece({ bands: [WEDGES] });
+    const warp = new RegExp(`stroke="${shade('#d8d2c1', 0.5)}"`);
+    expect(drawCloth(bare, hanging)).toMatch(warp);
+    expect(drawCloth(bare, { ...hanging, woven: 0.5 })).not.toMatch(warp);
+    expect(drawCloth(wovenPiece({ bands: [RYA, WEDGES] }), hanging)).not.toMatch(warp);
   });
 
   it('turns a turned piece through half a circle: what was left is right', () => {

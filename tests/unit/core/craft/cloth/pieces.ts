@@ -1,5 +1,5 @@
 // Pieces to draw in tests: small, invented, with every technique.
-import type { ClothBand, CordPiece, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import type { ClothBand, CordPiece, RyaBand, SoumakBand, TabbyBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 
 export const SLACK = '#93a8a6';
 export const ESTUARY = '#2f5366';
@@ -9,7 +9,7 @@ const tabby = (name: string, heightMm: number, picks: number): ClothBand => ({
   technique: 'tabby', name, heightMm, colour: SLACK, yarn: 'Slack Water', picks, cover: 0.7, shapes: [],
 });
 
-export const WEDGES: ClothBand = {
+export const WEDGES: TabbyBand = {
   technique: 'tabby', name: 'dunes', heightMm: 160, colour: SLACK, yarn: 'Slack Water', picks: 96, cover: 0.7,
   shapes: [{
     colour: '#cdbb94', yarn: 'Dry Sand',
@@ -17,11 +17,11 @@ export const WEDGES: ClothBand = {
   }],
 };
 
-export const RYA: ClothBand = {
+export const RYA: RyaBand = {
   technique: 'rya', name: 'fringe', heightMm: 24, colour: FOAM, yarn: 'Foam', rows: 3, knotEnds: 2, strands: 6, pileMm: 140, groundColour: ESTUARY,
 };
 
-export const SOUMAK: ClothBand = {
+export const SOUMAK: SoumakBand = {
   technique: 'soumak', name: 'ridge', heightMm: 60, colour: ESTUARY, yarn: 'Estuary', rows: 12, over: 4, back: 2,
   soumakShare: 0.8, tabbyBetween: 2, tabbyColour: SLACK,
 };
