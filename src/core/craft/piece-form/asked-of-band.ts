@@ -1,0 +1,109 @@
+/** What is asked of a band: its technique, and what that technique wants to know. */
+import type { TechniqueName } from '#core/craft/piece.ts';
+import { TECHNIQUE_NAMES } from '#core/craft/techniques/registry.ts';
+import { option, type Asked } from './asked.ts';
+
+export const TECHNIQUE_LABELS: Readonly<Record<TechniqueName, string>> = {
+  tabby: 'Tabby',
+  soumak: 'Soumak',
+  rya: 'Rya fringe',
+  roving: 'Roving',
+  'hem-stitch': 'Hem-stitch',
+  'loop-pile': 'Loop pile',
+  twining: 'Twining',
+};
+
+const [firstName, ...otherNames] = TECHNIQUE_NAMES;
+export const TECHNIQUE: Asked = {
+  key: 'technique', kind: 'choice', label: 'Technique', needed: true,
+  options: [option(firstName, TECHNIQUE_LABELS[firstName]), ...otherNames.map((name) => option(name, TECHNIQUE_LABELS[name]))],
+};
+
+export const BAND_NAME: Asked = { key: 'name', kind: 'text', label: 'Name in texts', maxLength: 40, hint: 'As lessons ask for its amounts: dunes, sky-2.', otherwise: 'no amounts of its own' };
+
+/** Ticked: the band takes what the others leave of the height. */
+export const FILL_KEY = 'fill';
+
+const yarn: Asked = { key: 'yarn', kind: 'role', label: 'Yarn', needed: true };
+const rows = (starter: number): Asked => ({ key: 'rows', kind: 'number', label: 'Rows', needed: true, starter });
+const height = (starter?: number): Asked => ({ key: 'heightMm', kind: 'length', label: 'Height', needed: true, ...(starter === undefined ? {} : { starter }) });
+const over = (): Asked => ({ key: 'over', kind: 'number', label: 'Over', called: 'Ends passed over', unit: 'ends', needed: true, starter: 4 });
+
+export const BAND_FIELDS: Readonly<Record<TechniqueName, readonly Asked[]>> = {
+  tabby: [yarn, height()],
+  soumak: [
+    yarn,
+    over(),
+    { key: 'back', kind: 'number', label: 'Back under', called: 'Ends gone back under', unit: 'ends', needed: true, starter: 2 },
+    rows(4),
+    { key: 'tabbyBetween', kind: 'number', label: 'Tabby between', called: 'Picks of tabby between rows', unit: 'rows', needed: true, starter: 2 },
+    { key: 'tabbyYarn', kind: 'role', label: 'Yarn of that tabby', called: 'Yarn of the tabby', needed: true },
+  ],
+  rya: [
+    yarn,
+    { key: 'strands', kind: 'number', label: 'Strands in a knot', needed: true, starter: 3 },
+    { key: 'legEnds', kind: 'number', label: 'Ends in a leg', called: 'Ends in each leg', unit: 'ends', needed: true, starter: 1 },
+    { key: 'pileMm', kind: 'length', label: 'Pile', called: 'Length of the pile', needed: true, starter: 100 },
+    { key: 'trimMm', kind: 'fine', label: 'To trim away', called: 'Length to trim away', needed: true, starter: 10 },
+    rows(1),
+    height(6),
+  ],
+  roving: [
+    yarn,
+    over(),
+    { key: 'bulgeMm', kind: 'fine', label: 'Bulge', needed: true, starter: 12 },
+    height(40),
+    { key: 'passes', kind: 'number', label: 'Passes', otherwise: 'one' },
+  ],
+  'hem-stitch': [
+    yarn,
+    { key: 'bundleEnds', kind: 'number', label: 'Ends in a bundle', unit: 'ends', needed: true, starter: 2 },
+    { key: 'reachPicks', kind: 'number', label: 'Reaches up', called: 'Rows the stitch reaches up', unit: 'rows', needed: true, starter: 2 },
+  ],
+  'loop-pile': [
+    yarn,
+    { key: 'rodMm', kind: 'fine', label: 'Rod', called: 'Thickness of the rod', starter: 10, otherwise: 'drawn by hand' },
+    { key: 'loopMm', kind: 'fine', label: 'Or loops of', called: 'Height of a loop', otherwise: 'over the rod' },
+    rows(4),
+    height(20),
+  ],
+  twining: [yarn, rows(2)],
+};
+
+export const isTechnique = (text: string): text is TechniqueName => Object.hasOwn(BAND_FIELDS, text);
+export const bandFields = (technique: string): readonly Asked[] => (isTechnique(technique) ? BAND_FIELDS[technique] : []);
+
+/** Keys of all texts of a band, whatever its technique. */
+export const BAND_KEYS: readonly string[] = [
+  ...new Set(['technique', 'name', FILL_KEY, ...TECHNIQUE_NAMES.flatMap((name) => BAND_FIELDS[name].map(({ key }) => key))]),
+];
+
+export const SHAPE: Asked = {
+  key: 'shape', kind: 'choice', label: 'Shape', needed: true,
+  options: [option('triangle', 'Triangle'), option('rectangle', 'Rectangle'), option('circle', 'Circle')],
+};
+export const JOIN: Asked = {
+  key: 'join', kind: 'choice', label: 'Colours meet',
+  options: [option('slit', 'With a slit'), option('dovetail', 'Dovetailed'), option('interlock', 'Interlocked')],
+};
+/** Without a choice, steps are alike unless the shape leans; so an untouched field must not send one. */
+export const SYMMETRIC: Asked = {
+  key: 'symmetric', kind: 'choice', label: 'Steps alike on both sides',
+  options: [{ text: '', value: '', label: 'Unless it leans' }, { text: 'yes', value: true, label: 'Yes' }, { text: 'no', value: false, label: 'No' }],
+};
+
+const PLACING: readonly Asked[] = [
+  { key: 'centreMm', kind: 'length', label: 'Its middle', called: 'Middle of the shape', hint: 'From the left selvedge.', otherwise: 'the middle' },
+  { key: 'bottomMm', kind: 'length', label: 'Its foot', called: 'Foot of the shape', hint: 'From the band’s first row.', otherwise: 'the first row' },
+];
+const LEAN: Asked = { key: 'leanMm', kind: 'lean', label: 'Lean', hint: 'How far the top stands to the right; −2 is to the left.', otherwise: 'upright' };
+const UPRIGHT: readonly Asked[] = [
+  { key: 'baseMm', kind: 'length', label: 'Base', called: 'Base of the shape', needed: true },
+  { key: 'heightMm', kind: 'length', label: 'Height', called: 'Height of the shape', needed: true },
+];
+const ROUND: readonly Asked[] = [{ key: 'radiusMm', kind: 'length', label: 'Radius', called: 'Radius of the circle', needed: true }];
+
+/** Measures and place of a shape of this kind. */
+export const shapeFields = (kind: string): readonly Asked[] => [yarn, ...(kind === 'circle' ? ROUND : UPRIGHT), ...PLACING, LEAN, SYMMETRIC, JOIN];
+
+export const SHAPE_KEYS: readonly string[] = ['shape', 'yarn', 'radiusMm', ...shapeFields('triangle').map(({ key }) => key)].filter((key, index, all) => all.indexOf(key) === index);

@@ -1,0 +1,55 @@
+/** What is asked of a yarn. */
+import type { CountSystem } from '#core/craft/piece.ts';
+import { option, type Asked } from './asked.ts';
+
+export const ROLE: Asked = { key: 'role', kind: 'text', label: 'Role', called: 'The role', maxLength: 40, needed: true, hint: 'What it does in the piece: ground, accent, fringe.' };
+
+export const LABEL: Asked = { key: 'label', kind: 'text', label: 'Name on the label', maxLength: 120 };
+export const COLOUR: Asked = { key: 'colour', kind: 'text', label: 'Colour', maxLength: 7, otherwise: 'undyed' };
+
+/** Ways of saying how thick a yarn is that are no count. `wraps` is the way out when there is no label: tex is reckoned from them. */
+export type GristWay = 'tex' | 'metresPer100g' | 'wraps' | CountSystem;
+
+export const BY: Asked = {
+  key: 'by', kind: 'choice', label: 'How thick, by', needed: true,
+  options: [
+    option('metresPer100g', 'Metres in 100 g'),
+    option('tex', 'Tex'),
+    option('nm', 'Nm, as 2/16'),
+    option('ne-cotton', 'Cotton count, as 8/2'),
+    option('ne-worsted', 'Worsted count'),
+    option('lea', 'Linen lea'),
+    option('run', 'Woollen run'),
+    option('yorkshire', 'Yorkshire skein'),
+    option('denier', 'Denier'),
+    option('jute', 'Jute count'),
+    option('grain', 'American grain'),
+    option('wraps', 'Measured wraps alone'),
+  ],
+};
+
+const GRIST_LABELS: Readonly<Record<string, string>> = { metresPer100g: 'Metres in 100 g', tex: 'Tex' };
+
+/** The field beside the way; a count is text, since it may be written `8/2`. */
+export function gristAsked(by: string): Asked {
+  const label = GRIST_LABELS[by] ?? 'Count';
+  return label === 'Count'
+    ? { key: 'grist', kind: 'text', label, called: 'The count', maxLength: 20, needed: true }
+    : { key: 'grist', kind: 'number', label, ...(by === 'tex' ? { unit: 'tex' } : { unit: 'm' }), needed: true };
+}
+
+export const WRAPS: Asked = {
+  key: 'wrapsPerInch', kind: 'number', label: 'Wraps in an inch', hint: 'Wound snugly round a ruler, without pulling, and counted.', otherwise: 'reckoned',
+};
+export const STRANDS: Asked = { key: 'strands', kind: 'number', label: 'Strands as one', called: 'Strands together', otherwise: 'one' };
+export const BALL: readonly Asked[] = [
+  { key: 'ball.metres', kind: 'number', label: 'In a ball', called: 'Metres in a ball', unit: 'm', otherwise: 'balls are not counted' },
+  { key: 'ball.grams', kind: 'number', label: 'It weighs', called: 'Grams of a ball', unit: 'g' },
+];
+export const FIBRE: Asked = { key: 'fibre', kind: 'text', label: 'Fibre', maxLength: 60 };
+export const ASHENHURST: Asked = { key: 'ashenhurstK', kind: 'number', label: 'Ashenhurst’s K', otherwise: '0.84 as weft, 0.90 as warp' };
+
+/** What is written into the piece as it stands; role and grist have rules of their own. */
+export const YARN_TRAITS: readonly Asked[] = [LABEL, COLOUR, STRANDS, ASHENHURST, WRAPS, ...BALL, FIBRE];
+/** Keys of all texts of a yarn. */
+export const YARN_KEYS: readonly string[] = ['role', 'by', 'grist', ...YARN_TRAITS.map(({ key }) => key)];

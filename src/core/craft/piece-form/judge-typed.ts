@@ -1,0 +1,47 @@
+/** What a form comes to: the piece and its plan, or a sentence at every field that stands in the way. */
+import type { Piece } from '#core/craft/piece.ts';
+import { planPiece, type Plan } from '#core/craft/plan.ts';
+import type { Problem } from '#core/outcome.ts';
+import { fieldOfPlace } from './field-names.ts';
+import { readTyped, type Fault } from './read-typed.ts';
+import { textOf, type TypedPiece } from './typed-piece.ts';
+
+export interface Found extends Fault {
+  /** Name of the field it is about; `bands`, `yarns` or '' for what belongs to no single one. */
+  readonly field: string;
+}
+
+export type Judgement =
+  | { readonly ok: true; readonly piece: Piece; readonly plan: Plan; readonly warnings: readonly Found[] }
+  | { readonly ok: false; readonly problems: readonly Found[] };
+
+/**
+ * Reads and reckons what stands in the form. Texts that cannot be read are told in the form's own words; for them the
+ * engine's complaint, that a value is missing there, is left out.
+ */
+export function judgeTyped(typed: TypedPiece): Judgement {
+  const { piece, faults } = readTyped(typed);
+  const plan = planPiece(piece, typed.units);
+  // Reckoned without a problem, so it has the shape of a piece.
+  if (plan.ok && faults.size === 0) return { ok: true, piece: piece as Piece, plan: plan.value, warnings: placed(plan.warnings, typed) };
+  const own = [...faults].map(([field, fault]): Found => ({ field, ...fault }));
+  const engine = plan.ok ? [] : placed(plan.problems, typed);
+  const told = new Set(faults.keys());
+  const also = engine.filter(({ field }) => !told.has(field) && !hides(faults, field, typed));
+  return { ok: false, problems: [...own, ...onePerField(also)] };
+}
+
+function placed(problems: readonly Problem[], typed: TypedPiece): Found[] {
+  return problems.map(({ path, message }) => ({ field: fieldOfPlace(path, typed), says: message, isMissing: false }));
+}
+
+function onePerField(found: readonly Found[]): Found[] {
+  return [...new Map(found.toReversed().map((one) => [one.field, one])).values()].toReversed();
+}
+
+/** A yarn that cannot be read is told at its own field; what the engine says of the gap that leaves is nothing new. */
+function hides(faults: ReadonlyMap<string, Fault>, field: string, { yarns }: TypedPiece): boolean {
+  if (field === 'yarns') return yarns.some(({ texts }) => textOf(texts, 'role').trim() === '');
+  const whole = /^(warp\.yarn|yarns\.\d+)\.(?:role|grist)$/.exec(field)?.[1];
+  return whole !== undefined && ['by', 'grist', 'wrapsPerInch'].some((key) => faults.has(`${whole}.${key}`));
+}

@@ -1,0 +1,76 @@
+import { describe, expect, test } from 'vitest';
+import { actText, changeTyped, readAct, typeIn, type Act } from '#core/craft/piece-form/change-typed.ts';
+import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
+import { typePiece } from '#core/craft/piece-form/type-piece.ts';
+import { pieceOf } from '../a-piece.ts';
+
+const form = typePiece(pieceOf({ technique: 'tabby', name: 'foot', yarn: 'ground', heightMm: 30 }, { technique: 'twining', yarn: 'ground', rows: 2 }), 'cm');
+const techniques = (act: Act): (string | undefined)[] => changeTyped(form, act).bands.map(({ texts }) => texts['technique']);
+const ids = (act: Act): number[] => changeTyped(form, act).bands.map(({ id }) => id);
+
+describe('rows of the form', () => {
+  test('a band is put in where it is woven, with the yarn of the one before it', () => {
+    const { bands } = changeTyped(form, { do: 'add-band', after: 1 });
+    expect(bands.map(({ id }) => id)).toEqual([1, 2, 4, 3]);
+    expect(bands[2]?.texts).toEqual({ technique: 'tabby', yarn: '1' });
+    expect(ids({ do: 'add-band', after: -1 })).toEqual([4, 1, 2, 3]);
+    expect(ids({ do: 'add-band', after: 2 })).toEqual([1, 2, 3, 4]);
+  });
+
+  test('a copy follows its pattern and has no name', () => {
+    const { bands } = changeTyped(form, { do: 'copy-band', band: 0 });
+    expect(bands.slice(0, 2).map(({ texts }) => [texts['heightMm'], texts['name']])).toEqual([['3', 'foot'], ['3', '']]);
+    expect(bands).toHaveLength(4);
+  });
+
+  test('a copy of the band that fills does not fill too', () => {
+    expect(changeTyped(form, { do: 'copy-band', band: 2 }).bands.map(({ texts }) => texts['fill'])).toEqual(['', '', 'yes', '']);
+  });
+
+  test('bands are woven sooner or later, and no further than first and last', () => {
+    expect(ids({ do: 'later', band: 0 })).toEqual([2, 1, 3]);
+    expect(ids({ do: 'sooner', band: 2 })).toEqual([1, 3, 2]);
+    expect(ids({ do: 'sooner', band: 0 })).toEqual([1, 2, 3]);
+    expect(ids({ do: 'later', band: 2 })).toEqual([1, 2, 3]);
+  });
+
+  test('a band that is not there changes nothing', () => {
+    for (const act of [{ do: 'copy-band', band: 9 }, { do: 'take-out-band', band: 9 }, { do: 'sooner', band: 9 }, { do: 'add-shape', band: 9 }] as const) expect(techniques(act)).toEqual(['tabby', 'twining', 'tabby']);
+  });
+
+  test('a shape is put in and taken out', () => {
+    const one = changeTyped(form, { do: 'add-shape', band: 0 });
+    expect(one.bands[0]?.shapes).toEqual([{ id: 1, texts: { shape: 'triangle', yarn: '1' } }]);
+    expect(changeTyped(one, { do: 'take-out-shape', band: 0, shape: 0 }).bands[0]?.shapes).toEqual([]);
+  });
+
+  test('bands whose yarn was taken out ask for one', () => {
+    const judged = judgeTyped(changeTyped(changeTyped(form, { do: 'add-yarn' }), { do: 'take-out-yarn', yarn: 0 }));
+    expect(judged.ok ? [] : judged.problems.map(({ field }) => field)).toEqual(expect.arrayContaining(['bands.0.yarn', 'bands.1.yarn', 'bands.2.yarn']));
+  });
+
+  test('a role written anew is the same yarn in every band', () => {
+    const judged = judgeTyped(typeIn(form, 'yarns.0.role', 'sea'));
+    expect(judged.ok && judged.piece.bands.map(({ yarn }) => yarn)).toEqual(['sea', 'sea', 'sea']);
+  });
+
+  test('another technique begins with what is usual, and the old one’s words come back with it', () => {
+    const soumak = typeIn(form, 'bands.0.technique', 'soumak');
+    expect(soumak.bands[0]?.texts).toMatchObject({ over: '4', back: '2', rows: '4', tabbyBetween: '2' });
+    expect(typeIn(soumak, 'bands.0.technique', 'tabby').bands[0]?.texts).toMatchObject({ heightMm: '3', name: 'foot' });
+  });
+});
+
+describe('a button’s act', () => {
+  test.each([
+    [{ do: 'look' }, 'look'], [{ do: 'add-band', after: -1 }, 'add-band:-1'], [{ do: 'copy-band', band: 3 }, 'copy-band:3'],
+    [{ do: 'take-out-shape', band: 2, shape: 0 }, 'take-out-shape:2:0'], [{ do: 'take-out-yarn', yarn: 1 }, 'take-out-yarn:1'], [{ do: 'add-yarn' }, 'add-yarn'],
+  ] as const)('%o is sent as %s and read again', (act, text) => {
+    expect(actText(act)).toBe(text);
+    expect(readAct(text)).toEqual(act);
+  });
+
+  test.each(['', 'save', 'copy-band', 'copy-band:x', 'copy-band:1.5', 'copy-band:99999', 'take-out-shape:1', 'constructor:1'])('“%s” is none', (text) => {
+    expect(readAct(text)).toBeNull();
+  });
+});

@@ -1,0 +1,62 @@
+import { readFileSync } from 'node:fs';
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import type { Piece } from '#core/craft/piece.ts';
+import { planPiece } from '#core/craft/plan.ts';
+import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
+import { shiftPoint } from '#core/craft/piece-form/field-text.ts';
+import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
+import { readTyped } from '#core/craft/piece-form/read-typed.ts';
+import { typePiece } from '#core/craft/piece-form/type-piece.ts';
+import { arbitraryPiece } from './arbitrary-piece.ts';
+
+const SHIPPED = ['../../../../../content/series/low-tide/piece.json', '../../../../reference/worked-piece.json'];
+const shipped = (path: string): Piece => JSON.parse(readFileSync(new URL(path, import.meta.url), 'utf8')) as Piece;
+
+/** What a browser sends for this form, read as the server reads it. */
+function sent(piece: Piece, units: 'cm' | 'in') {
+  const fields = fieldsOfTyped(typePiece(piece, units));
+  return typedOfFields((name) => fields.get(name));
+}
+
+describe('a piece in a form', () => {
+  test.each(['cm', 'in'] as const)('comes back the same in %s, number for number', (units) => {
+    fc.assert(fc.property(arbitraryPiece, (piece) => {
+      const { piece: read, faults } = readTyped(typePiece(piece, units));
+      expect([...faults]).toEqual([]);
+      expect(read).toEqual(piece);
+    }), { numRuns: 300 });
+  });
+
+  test.each(['cm', 'in'] as const)('comes back the same after a browser has sent it, in %s', (units) => {
+    fc.assert(fc.property(arbitraryPiece, (piece) => {
+      expect(readTyped(sent(piece, units)).piece).toEqual(piece);
+    }), { numRuns: 150 });
+  });
+
+  test.each(SHIPPED.flatMap((path) => [[path, 'cm'], [path, 'in']] as const))('keeps the plan of %s in %s', (path, units) => {
+    const piece = shipped(path);
+    const judged = judgeTyped(sent(piece, units));
+    const planned = planPiece(piece, units);
+    if (!judged.ok || !planned.ok) throw new RangeError(JSON.stringify(judged));
+    expect(judged.piece).toEqual(piece);
+    expect(judged.plan).toEqual(planned.value);
+  });
+
+  test('shows plain numbers where they are plain', () => {
+    const { texts, yarns, bands } = typePiece(shipped(SHIPPED[0] ?? ''), 'cm');
+    expect([texts['size.widthMm'], texts['loom.nailPitchMm'], texts['allowances.drawIn'], texts['beat.by']]).toEqual(['40', '10', '2', 'comb']);
+    expect(yarns[0]?.texts).toMatchObject({ role: 'shore', by: 'metresPer100g', grist: '300', 'ball.grams': '50' });
+    expect(bands[6]?.shapes[0]?.texts).toMatchObject({ shape: 'triangle', baseMm: '21', leanMm: '3.5' });
+  });
+
+  test('says a centimetre size in centimetres to who measures in inches, rather than round it', () => {
+    const { texts } = typePiece(shipped(SHIPPED[0] ?? ''), 'in');
+    expect(texts['size.widthMm']).toBe('40 cm');
+    expect(typePiece({ ...shipped(SHIPPED[0] ?? ''), size: { widthMm: 14.875 * 25.4, heightMm: 406.4 } }, 'in').texts).toMatchObject({ 'size.widthMm': '14 7/8', 'size.heightMm': '16' });
+  });
+});
+
+test.each([['0.02', 2, '2'], ['0.025', 2, '2.5'], ['1', 2, '100'], ['0', 2, '0'], ['2.5', -2, '0.025'], ['12', -2, '0.12'], ['100', -2, '1'], ['5', -2, '0.05']])('the point of %s moved by %i gives %s', (text, places, shifted) => {
+  expect(shiftPoint(text, places)).toBe(shifted);
+});
