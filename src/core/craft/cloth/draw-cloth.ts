@@ -48,7 +48,7 @@ function pileRoom(view: ClothView): (bandHeight: number) => number {
 }
 
 /** However tall a piece, a picture of it holds no more rows than this. */
-const MOST_ROWS = 280;
+const MOST_ROWS = 250;
 /** Views whose rows have at least this many pixels show the plies of their yarn. */
 const PLIED_FROM = 9;
 

@@ -27,7 +27,7 @@ export interface Picks {
 const LIT_FROM = 3.4;
 const BOWED_FROM = 5;
 /** Where so many rows lie together, nobody sees that they bow. */
-const BOWED_ROWS = 120;
+const BOWED_ROWS = 100;
 /** Near, rows from here on show the plies of their yarn and a shade along their lower side. */
 const PLIED_FROM = 9;
 

@@ -7,12 +7,13 @@ import { ROUND, dashes, num } from '#core/craft/cloth/markup.ts';
 import type { PickRow } from '#core/craft/cloth/picks.ts';
 import type { Weave } from '#core/craft/cloth/weave.ts';
 
-/** Turns finer than this are drawn as one dashed line for each edge, coarser ones as arcs. */
+/** Turns finer than this, or more than so many, are drawn as one dashed line for each edge; the others as arcs. */
 const ARCS_FROM = 5;
+const MOST_ARCS = 100;
 
 export function drawSelvedge(rows: readonly PickRow[], pitch: number, colour: string, weave: Weave): string {
   const out = Math.min(pitch * 0.5, weave.end * 0.42);
-  return pitch < ARCS_FROM ? fineTurns(rows, pitch, out, colour, weave) : arcs(rows, pitch, out, colour, weave);
+  return pitch < ARCS_FROM || rows.length > MOST_ARCS ? fineTurns(rows, pitch, out, colour, weave) : arcs(rows, pitch, out, colour, weave);
 }
 
 const touchesLeft = (row: PickRow): boolean => row.x0 === 0;
