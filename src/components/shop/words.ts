@@ -38,7 +38,7 @@ export function choicesOf(choices: ShopChoices, chosen: { readonly technique?: s
   return {
     craft: [any('Any craft'), ...CRAFTS.map((value) => ({ value, label: CRAFT_WORDS[value] }))],
     technique: [any('Any'), ...techniques.map((value) => ({ value, label: value }))],
-    loom: [any('Any loom'), ...LOOMS.map((value) => ({ value, label: value === 'none' ? 'No loom' : `Frame of ${value} cm` }))],
+    loom: [any('Any loom'), ...LOOMS.map((value) => ({ value, label: value === 'none' ? 'No loom' : `${value}\u00a0cm inside` }))],
     hours: [any('Any'), ...HOURS.map((value) => ({ value, label: `Up to ${value}` }))],
     level: [any('Any level'), ...LEVELS.map((value) => ({ value, label: LEVEL_WORDS[value] }))],
     price: [any('Any price'), ...PRICES.map((value) => ({ value, label: priceChoice(value, choices.currency) }))],
