@@ -22,7 +22,8 @@ export interface MergedLine extends Omit<GatheringLine, 'publicId' | 'part'> {
 
 /**
  * Lines are the same when they are of one kind and name the same amount of a yarn, or have the same name. The words
- * kept are those of the first part that has any; ticked is what is ticked everywhere; needed until the last of all.
+ * kept are those of the first part that has any; a thing is gathered once, so it is ticked as soon as one part's line is;
+ * needed until the last of all.
  */
 export function mergeLines(lines: readonly GatheringLine[]): MergedLine[] {
   const merged = new Map<string, MergedLine>();
@@ -37,7 +38,7 @@ export function mergeLines(lines: readonly GatheringLine[]): MergedLine[] {
       standIn: before.standIn ?? line.standIn,
       note: before.note ?? line.note,
       untilPart: before.untilPart === null || line.untilPart === null ? (before.untilPart ?? line.untilPart) : Math.max(before.untilPart, line.untilPart),
-      ticked: before.ticked && line.ticked,
+      ticked: before.ticked || line.ticked,
       publicIds: [...before.publicIds, publicId],
       parts: before.parts.includes(part) ? before.parts : [...before.parts, part],
     });

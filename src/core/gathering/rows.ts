@@ -28,15 +28,28 @@ export interface ShownFor {
   /** The teacher's own yarns, to say which of them the student's stands for. */
   readonly pattern: Piece | null;
   readonly units: Units;
-  /** The list of a whole series, to shop by; else that of one part, beside its text, where room is short. */
-  readonly wholeSeries: boolean;
 }
 
-/** One line for each thing. Yarn comes first, then tools, then what else is needed. */
+const KINDS = ['yarn', 'tool', 'material'] as const;
+
+/** The list of a whole series, each thing once: yarn first, then tools, then what else is needed. */
 export function gatherRows(lines: readonly GatheringLine[], shownFor: ShownFor): ShownLine[] {
-  const merged = mergeLines(shownFor.wholeSeries ? asWholeYarns(lines, shownFor.pattern) : lines);
-  const order = ['yarn', 'tool', 'material'] as const;
-  return order.flatMap((kind) => merged.filter((line) => line.kind === kind).map((line) => rowOf(line, shownFor)));
+  const merged = mergeLines(asWholeYarns(lines, shownFor.pattern));
+  return KINDS.flatMap((kind) => merged.filter((line) => line.kind === kind).map((line) => rowOf(line, shownFor)));
+}
+
+/**
+ * The list of one part, with its own amounts and words. A thing that other parts ask for too is gathered once: its tick
+ * is that of all of them.
+ * @param lines of all parts
+ */
+export function partRows(lines: readonly GatheringLine[], part: number, shownFor: ShownFor): ShownLine[] {
+  const whole = mergeLines(asWholeYarns(lines, shownFor.pattern));
+  const own = mergeLines(lines.filter((line) => line.part === part)).map((line) => {
+    const all = whole.find(({ publicIds }) => line.publicIds.some((id) => publicIds.includes(id)));
+    return all === undefined ? line : { ...line, publicIds: all.publicIds, ticked: all.ticked };
+  });
+  return KINDS.flatMap((kind) => own.filter((line) => line.kind === kind).map((line) => rowOf(line, shownFor)));
 }
 
 /** The role a yarn's amount speaks of: `yarn.<role>`, or the yarn of a band. */
@@ -79,9 +92,9 @@ function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
     colour: line.kind === 'yarn' ? yarn?.colour : undefined,
     amount: amountIn(line, made, units),
     also: line.kind === 'yarn' ? weightWords(line, role, made, units) : '',
-    when: shownFor.wholeSeries ? partsWords(line.parts, line.untilPart) : '',
+    when: partsWords(line.parts, line.untilPart),
     note: line.note ?? '',
-    standIn: !shownFor.wholeSeries || isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
+    standIn: isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
   };
 }
 

@@ -33,6 +33,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/ticks': 'signed-in',
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
+  '/series/[slug]/gather': 'public',
   '/sign-in': 'public',
   '/sign-up': 'public',
   '/sign-out': 'public',

@@ -1,0 +1,57 @@
+import type { ShownLine } from '#core/gathering/rows.ts';
+import { useTicks, type Ticks } from '#islands/ticks/use-ticks.ts';
+import { GatherRows } from './GatherRows.tsx';
+import { GatherSum, type GatherSumProps } from './GatherSum.tsx';
+import { KeptHere } from './KeptHere.tsx';
+
+export interface GatherBoardProps {
+  /** Public id of the seat whose ticks these are; null without one. */
+  seat: string | null;
+  series: string;
+  lines: readonly ShownLine[];
+  /** Where the list goes without script. */
+  action: string;
+  sum: Omit<GatherSumProps, 'left' | 'total'>;
+}
+
+const GROUPS = [['yarn', 'Yarn'], ['tool', 'Tools'], ['material', 'Material']] as const;
+
+/** The list to shop by, and beside it what is still to get. */
+export function GatherBoard({ seat, ...board }: GatherBoardProps) {
+  return seat === null ? <Board {...board} ticks={null} /> : <TickedBoard {...board} seat={seat} />;
+}
+
+function TickedBoard({ seat, ...board }: Omit<GatherBoardProps, 'seat'> & { seat: string }) {
+  return <Board {...board} ticks={useTicks(seat, board.series, board.lines)} />;
+}
+
+function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'seat'> & { ticks: Ticks | null }) {
+  const had = (some: readonly ShownLine[]): number => (ticks === null ? 0 : some.filter(({ key }) => ticks.isTicked(key)).length);
+  const groups = GROUPS.map(([kind, title]) => ({ kind, title, own: lines.filter((line) => line.kind === kind) })).filter(({ own }) => own.length > 0);
+  return (
+    <>
+      <form method="post" action={action} className="gather-list">
+        <input type="hidden" name="series" value={series} />
+        {ticks !== null && (
+          <div className="row between">
+            <p><b className="num">{had(lines)} of {lines.length} gathered</b></p>
+            <KeptHere queue={ticks.queue} />
+          </div>
+        )}
+        {groups.map(({ kind, title, own }) => (
+          <section key={kind} className={kind === 'yarn' ? 'gather-group' : 'gather-group cols'} aria-labelledby={`gather-${kind}`}>
+            <h2 className="h3" id={`gather-${kind}`}>
+              {title}
+              {ticks !== null && <span className="small quiet">{had(own)} of {own.length}</span>}
+            </h2>
+            <div className="lined">
+              <GatherRows lines={own} ticks={ticks} />
+            </div>
+          </section>
+        ))}
+        {ticks !== null && <noscript><button className="btn btn-act keep-ticks" type="submit">Keep my ticks</button></noscript>}
+      </form>
+      <GatherSum {...sum} left={lines.length - had(lines)} total={lines.length} />
+    </>
+  );
+}
