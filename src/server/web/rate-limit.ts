@@ -24,7 +24,8 @@ export const RATE_RULES = {
   signInInARow: { name: 'sign-in-row', limit: 100, windowSeconds: 2_592_000 },
   /** Times a signed-in person mistypes the password she is asked for again. */
   prove: { name: 'prove', limit: 10, windowSeconds: 900 },
-  signUp: { name: 'sign-up', limit: 20, windowSeconds: 3_600 },
+  /** Accounts opened from one network: a whole class may sit in one room. */
+  signUp: { name: 'sign-up', limit: 60, windowSeconds: 3_600 },
   /** Letters of one kind to one address that anybody can cause; beyond it none is written, and the answer stays the same. */
   letterToAddress: { name: 'letter-address', limit: 5, windowSeconds: 3_600 },
   letterByNetwork: { name: 'letter-network', limit: 30, windowSeconds: 3_600 },

@@ -1,0 +1,48 @@
+/**
+ * Journeys in which nothing may go wrong unseen: any error or warning in the console, and with it any report of the
+ * content policy, fails the test that caused it.
+ */
+import axe from 'axe-core';
+import { expect, test as base, type Page } from 'playwright/test';
+
+/** A page that answers 404 or 422 on purpose is told of in the console as well. */
+const ANSWERED_ON_PURPOSE = /^Failed to load resource: the server responded with a status of (?:404|410|422|429)\b/;
+
+export const test = base.extend({
+  page: async ({ page }, use) => {
+    const faults: string[] = [];
+    page.on('console', (message) => {
+      if (['error', 'warning'].includes(message.type()) && !ANSWERED_ON_PURPOSE.test(message.text())) faults.push(`${page.url()}: ${message.text()}`);
+    });
+    page.on('pageerror', (error) => { faults.push(`${page.url()}: ${error.message}`); });
+    await use(page);
+    expect(faults).toEqual([]);
+  },
+});
+
+const NARROWEST = 320;
+
+/** Nothing that a program can find stands between the page and those who hear or zoom it; it never scrolls sideways, nor at 320 px. */
+export async function expectFaultless(page: Page): Promise<void> {
+  await page.evaluate(() => document.fonts.ready.then(() => undefined));
+  await page.evaluate(axe.source);
+  const found = await page.evaluate(async () => (await window.axe.run(document, { resultTypes: ['violations'] })).violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`));
+  expect(found, page.url()).toEqual([]);
+  await expectNoSidewaysScroll(page);
+  const size = page.viewportSize();
+  if (size === null || size.width > 520) return;
+  await page.setViewportSize({ ...size, width: NARROWEST });
+  await expectNoSidewaysScroll(page);
+  await page.setViewportSize(size);
+}
+
+async function expectNoSidewaysScroll(page: Page): Promise<void> {
+  const over = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+  expect(over, `${page.url()} scrolls sideways by ${over} px`).toBeLessThanOrEqual(0);
+}
+
+declare global {
+  interface Window {
+    axe: typeof axe;
+  }
+}
