@@ -4,5 +4,6 @@ import { checkout } from './checkout.ts';
 import { following } from './following.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
+import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, office, people };
+export const server = { bench, checkout, following, office, people, workroom };

@@ -41,9 +41,12 @@ export type NewLessonInput = z.output<typeof NewLessonForm>;
 export const LessonDraftForm = z.object({
   lesson: publicId,
   revision,
-  source: z.string().max(220_000, 'A lesson holds at most 200,000 characters. Make two of it.').default(''),
+  source: z.string({ required_error: 'The text did not arrive, so nothing was changed.' }).max(220_000, 'A part holds at most 200,000 characters. Make two of it.'),
 });
 export type LessonDraftInput = z.output<typeof LessonDraftForm>;
+
+/** A text to be read while it is being written; nothing is kept. */
+export const LessonCheckInput = LessonDraftForm.pick({ source: true });
 
 export const LessonSettingsForm = z.object({
   lesson: publicId,
@@ -52,7 +55,7 @@ export const LessonSettingsForm = z.object({
   isPreview: ticked,
   rule: z.enum(['at-once', 'on-date', 'after-seat', 'after-verdict']),
   /** The teacher's own clock, `YYYY-MM-DDTHH:mm`, in the zone of her workroom. */
-  wall: z.string().optional(),
+  wall: z.string().trim().optional().transform((typed) => typed?.replace(/^(\d{4}-\d{2}-\d{2})\s+(\d{2}:\d{2})$/, '$1T$2')),
   days: z.string().optional(),
   /** Public id of the part whose verdict opens this one. */
   after: z.string().optional(),
@@ -66,8 +69,12 @@ export type LessonSettingsInput = z.output<typeof LessonSettingsForm>;
 
 export const LessonForm = z.object({ lesson: publicId });
 
-/** `to` is the number the part shall have: 1 puts it first. */
-export const MoveLessonForm = z.object({ lesson: publicId, to: wholeNumber('Say which number the part shall have.', 1, 99) });
+/** By one place, or to the number it shall have: 1 puts it first. */
+export const MoveLessonForm = z.object({
+  lesson: publicId,
+  by: z.enum(['up', 'down']).optional(),
+  to: wholeNumber('Say which number the part shall have.', 1, 99).optional(),
+}).refine(({ by, to }) => by !== undefined || to !== undefined, { path: ['to'], message: 'Say which number the part shall have.' });
 export type MoveLessonInput = z.output<typeof MoveLessonForm>;
 
 const gatheringFields = {

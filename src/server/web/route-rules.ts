@@ -52,4 +52,6 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/_image': 'public',
   '/_server-islands/[name]': 'public',
   '/workroom/bench': 'bench',
+  '/workroom/series/new': 'teacher',
+  '/workroom/series/[slug]': 'teacher',
 };

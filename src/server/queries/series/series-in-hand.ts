@@ -1,9 +1,12 @@
 /** A series with everything that `whatIsMissing` looks at. */
 import { amountOf } from '#core/craft/amounts.ts';
+import type { SeriesMediaFile } from '#contracts/media.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import type { PartInHand, SeriesInHand } from '#core/series/missing.ts';
-import { GatheringItem, Lesson, PatternPiece, SeriesMedia, type Series } from '#server/models/index.ts';
+import { GatheringItem, Lesson, PatternPiece, type Series } from '#server/models/index.ts';
+import { mediaOfSeries } from '#server/queries/media/media-of-series.ts';
+import { partOpenings } from '#server/queries/series/part-openings.ts';
 
 export interface Draft {
   readonly lesson: Lesson;
@@ -14,30 +17,43 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
   const [lessons, piece, media] = await Promise.all([
     Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
-    SeriesMedia.findAll({ where: { seriesId: series.id } }),
+    mediaOfSeries(series.id),
   ]);
-  const items = await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) } });
-  const drafts = lessons.map((lesson) => ({ lesson, text: lesson.draftReading }));
+  const items = lessons.length === 0 ? [] : await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) } });
   const plan = piece === null ? null : planPiece(piece.data);
-  const names = new Set(media.map(({ name }) => name));
-  const knows = (key: string): boolean => piece !== null && plan?.ok === true && amountOf(key, piece.data, plan.value).ok;
-  const parts = drafts.map(({ lesson, text }, index): PartInHand => {
-    const keys = [...(text.ok ? text.amounts : []), ...items.filter(({ lessonId }) => lessonId === lesson.id).map(({ amountKey }) => amountKey)];
-    const { opens } = lesson;
+  // While no plan can be reckoned, that is what is missing, not each amount.
+  const isUnknown = (key: string): boolean => piece !== null && plan?.ok === true && !amountOf(key, piece.data, plan.value).ok;
+  const openings = partOpenings(lessons);
+  const parts = lessons.map((lesson, index): PartInHand => {
+    const listed = items.filter(({ lessonId }) => lessonId === lesson.id);
     return {
-      number: index + 1,
+      ...(openings[index] ?? { number: index + 1, opensAfterPart: null, hasCheckpoint: false, opensAt: null }),
       title: lesson.title,
-      textProblems: text.ok ? [] : text.problems.map(({ line, reason }) => `Line ${line}: ${reason}`),
+      isPreview: lesson.isPreview,
       isEmpty: lesson.draftSource.trim() === '',
-      unknownAmounts: plan?.ok === true ? [...new Set(keys.filter((key): key is string => key !== null && !knows(key)))] : [],
-      unknownMedia: text.ok ? text.media.map(({ name }) => name).filter((name) => !names.has(name)) : [],
-      opensAfterPart: opens.rule === 'after-verdict' ? lessons.findIndex(({ publicId }) => publicId === opens.lesson) + 1 || index + 1 : null,
-      hasCheckpoint: lesson.checkpoint !== null,
-      opensAt: lesson.opensAt,
+      lineCount: listed.length,
+      unknownListAmounts: [...new Set(listed.flatMap(({ amountKey }) => (amountKey !== null && isUnknown(amountKey) ? [amountKey] : [])))],
+      ...factsOfText(lesson.draftReading, media, isUnknown),
     };
   });
+  const { title, summary, story, techniques, priceMinor } = series;
   return {
-    inHand: { title: series.title, summary: series.summary, priceMinor: series.priceMinor, pieceFits: plan === null ? null : plan.ok, parts },
-    drafts,
+    inHand: { title, summary, story, techniques, priceMinor, pieceFits: plan === null ? null : plan.ok, parts },
+    drafts: lessons.map((lesson) => ({ lesson, text: lesson.draftReading })),
+  };
+}
+
+type TextFacts = Pick<PartInHand, 'textProblems' | 'textWarnings' | 'stepCount' | 'unknownAmounts' | 'unknownMedia' | 'uncaptionedVideos'>;
+
+function factsOfText(text: LessonText | RefusedText, media: readonly SeriesMediaFile[], isUnknown: (key: string) => boolean): TextFacts {
+  if (!text.ok) return { textProblems: text.problems, textWarnings: [], stepCount: 0, unknownAmounts: [], unknownMedia: [], uncaptionedVideos: [] };
+  const named = (wanted: LessonText['media'][number]): SeriesMediaFile | undefined => media.find(({ kind, name }) => kind === wanted.kind && name === wanted.name);
+  return {
+    textProblems: [],
+    textWarnings: text.warnings,
+    stepCount: text.steps.length,
+    unknownAmounts: text.amounts.filter(isUnknown),
+    unknownMedia: text.media.filter((wanted) => named(wanted) === undefined).map(({ name }) => name),
+    uncaptionedVideos: text.media.filter((wanted) => wanted.kind === 'video' && named(wanted)?.files['captions'] === undefined && named(wanted) !== undefined).map(({ name }) => name),
   };
 }

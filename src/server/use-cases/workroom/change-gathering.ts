@@ -4,45 +4,61 @@ import { amountOf } from '#core/craft/amounts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { Context } from '#server/context.ts';
 import { AppError, fieldError } from '#server/errors.ts';
-import { GatheringItem, PatternPiece } from '#server/models/index.ts';
-import { ownGatheringItem, ownLesson, withSeriesLocked } from './own-series.ts';
+import { GatheringItem, PatternPiece, type Lesson, type Series } from '#server/models/index.ts';
+import { placeOf, type PartPlace } from './_part-place.ts';
+import { ownGatheringItem, ownLesson, withSeriesLocked } from './_own-series.ts';
 
 const MOST_LINES = 60;
 
-export async function addGatheringItem(ctx: Context, { lesson: publicId, ...line }: NewGatheringInput): Promise<GatheringItem> {
+/** Where a line stands after a change. */
+export interface LinePlace {
+  readonly part: PartPlace;
+  readonly publicId: string;
+  readonly name: string;
+  /** 1 for the first line. */
+  readonly number: number;
+}
+
+const lineAt = (series: Series, lesson: Lesson, { publicId, name }: GatheringItem, number: number): LinePlace => ({ part: placeOf(series, lesson), publicId, name, number });
+
+/** Puts a line at the end of a part's list. */
+export async function addGatheringItem(ctx: Context, { lesson: publicId, ...line }: NewGatheringInput): Promise<LinePlace> {
   const { lesson, series } = await ownLesson(ctx, publicId);
   await requireKnownAmount(series.id, line.amountKey);
   return withSeriesLocked(series, async () => {
     const position = (await GatheringItem.count({ where: { lessonId: lesson.id } })) + 1;
     if (position > MOST_LINES) throw new AppError('CONFLICT', { says: `A list holds at most ${MOST_LINES} lines.` });
-    return GatheringItem.create({ lessonId: lesson.id, position, ...line });
+    return lineAt(series, lesson, await GatheringItem.create({ lessonId: lesson.id, position, ...line }), position);
   });
 }
 
-export async function saveGatheringItem(ctx: Context, { item: publicId, ...line }: GatheringInput): Promise<void> {
-  const { item, series } = await ownGatheringItem(ctx, publicId);
+export async function saveGatheringItem(ctx: Context, { item: publicId, ...line }: GatheringInput): Promise<LinePlace> {
+  const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
   await requireKnownAmount(series.id, line.amountKey);
-  await withSeriesLocked(series, () => item.update(line));
+  return withSeriesLocked(series, async () => {
+    await item.update(line);
+    return lineAt(series, lesson, item, item.position);
+  });
 }
 
-export async function takeOutGatheringItem(ctx: Context, publicId: string): Promise<void> {
+export async function takeOutGatheringItem(ctx: Context, publicId: string): Promise<LinePlace> {
   const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
-  await withSeriesLocked(series, async () => {
+  return withSeriesLocked(series, async () => {
     await item.destroy();
     await number(await linesOf(lesson.id));
+    return lineAt(series, lesson, item, item.position);
   });
 }
 
-export async function moveGatheringItem(ctx: Context, publicId: string, by: 'up' | 'down'): Promise<void> {
+/** Changes places with the line before or after; the first stays first, the last last. */
+export async function moveGatheringItem(ctx: Context, publicId: string, by: 'up' | 'down'): Promise<LinePlace> {
   const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
-  await withSeriesLocked(series, async () => {
+  return withSeriesLocked(series, async () => {
     const lines = await linesOf(lesson.id);
     const from = lines.findIndex(({ id }) => id === item.id);
-    const to = from + (by === 'up' ? -1 : 1);
-    const [moved] = lines.splice(from, 1);
-    if (moved === undefined || to < 0 || to > lines.length) return;
-    lines.splice(to, 0, moved);
-    await number(lines);
+    const to = Math.min(Math.max(0, from + (by === 'up' ? -1 : 1)), lines.length - 1);
+    await number(lines.filter(({ id }) => id !== item.id).toSpliced(to, 0, ...lines.slice(from, from + 1)));
+    return lineAt(series, lesson, item, to + 1);
   });
 }
 

@@ -4,13 +4,18 @@ import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
 import type { Context } from '#server/context.ts';
 import { fieldError, found } from '#server/errors.ts';
 import { Lesson, Workroom } from '#server/models/index.ts';
-import { ownLesson, withSeriesLocked } from './own-series.ts';
+import { placeOf, type PartPlace } from './_part-place.ts';
+import { requireOpenable } from './_require-openable.ts';
+import { ownLesson, withSeriesLocked } from './_own-series.ts';
 
-/** Keeps a part's title, length, timetable and checkpoint. */
-export async function saveLessonSettings(ctx: Context, input: LessonSettingsInput): Promise<void> {
+/**
+ * Keeps a part's title, length, timetable and checkpoint. They hold at once, for those inside too.
+ * @throws VALIDATION at the field that does not work.
+ */
+export async function saveLessonSettings(ctx: Context, input: LessonSettingsInput): Promise<PartPlace> {
   const { lesson: known, series } = await ownLesson(ctx, input.lesson);
   const workroom = found(await Workroom.findByPk(series.workroomId));
-  await withSeriesLocked(series, async () => {
+  return withSeriesLocked(series, async (locked) => {
     const lesson = found(await Lesson.findByPk(known.id));
     const opens = await openingOf(ctx, input, lesson, workroom.timeZone);
     await lesson.update({
@@ -21,6 +26,11 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
       opensAt: opens.rule === 'on-date' ? instantOfWall(opens.wall, opens.zone) : null,
       checkpoint: checkpointOf(input),
     });
+    await requireOpenable(locked, ({ part }) => {
+      if (part !== lesson.position) return input.asksForPhoto ? 'wall' : 'asksForPhoto';
+      return input.rule === 'after-verdict' ? 'after' : 'wall';
+    });
+    return placeOf(series, lesson);
   });
 }
 

@@ -3,7 +3,7 @@ import type { Piece } from '#core/craft/piece.ts';
 import type { Problem } from '#core/outcome.ts';
 import type { Context } from '#server/context.ts';
 import { PatternPiece } from '#server/models/index.ts';
-import { ownSeries, requireRevision, withSeriesLocked } from './own-series.ts';
+import { ownSeries, requireRevision, withSeriesLocked } from './_own-series.ts';
 
 export type PieceSaved = { readonly ok: true; readonly revision: number } | { readonly ok: false; readonly problems: readonly Problem[] };
 

@@ -4,7 +4,7 @@ import { parsePrice } from '#core/money/parse-price.ts';
 import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
 import { fieldError } from '#server/errors.ts';
-import { ownSeries, requireRevision, withSeriesLocked } from './own-series.ts';
+import { ownSeries, requireRevision, withSeriesLocked } from './_own-series.ts';
 
 /** Keeps title, words and price of a series. A changed price holds for those who begin to buy from now on. */
 export async function saveSeriesDetails(ctx: Context, input: SeriesDetailsInput): Promise<void> {

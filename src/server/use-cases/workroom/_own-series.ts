@@ -36,6 +36,6 @@ export function withSeriesLocked<T>(series: Series, work: (locked: Series) => Pr
 /** Refuses to write over what another tab or person changed since. */
 export function requireRevision(known: number, sent: number): void {
   if (known !== sent) {
-    throw new AppError('CONFLICT', { says: 'This was changed in another window since you opened it. Copy what you wrote here, open the page anew, and put it in there.' });
+    throw new AppError('CONFLICT', { says: 'This was changed in another window since you opened it. What you typed stands below, and is not saved yet.' });
   }
 }

@@ -1,0 +1,85 @@
+/** Forms of the teacher's workroom: series, parts and their order, texts, settings, gathering lists, publishing. */
+import {
+  GatheringForm, GatheringItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
+  NewGatheringForm, NewLessonForm, NewSeriesForm, SeriesDetailsForm, SeriesForm,
+} from '#contracts/workroom.ts';
+import { clockWords } from '#core/moment-words.ts';
+import type { Context } from '#server/context.ts';
+import { signedIn } from '#server/errors.ts';
+import { publishSeries } from '#server/use-cases/series/publish-series.ts';
+import { takeBackSeries } from '#server/use-cases/series/take-back-series.ts';
+import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatheringItem, type LinePlace } from '#server/use-cases/workroom/change-gathering.ts';
+import type { PartPlace } from '#server/use-cases/workroom/_part-place.ts';
+import { addLesson, moveLesson, putBackLesson, takeOutLesson } from '#server/use-cases/workroom/change-lessons.ts';
+import { createSeries } from '#server/use-cases/workroom/create-series.ts';
+import { saveLessonDraft } from '#server/use-cases/workroom/save-lesson-draft.ts';
+import { saveLessonSettings } from '#server/use-cases/workroom/save-lesson-settings.ts';
+import { saveSeriesDetails } from '#server/use-cases/workroom/save-series-details.ts';
+import { formAction } from './form-action.ts';
+
+const seriesAt = (slug: string, anchor = ''): string => `/workroom/series/${slug}${anchor}`;
+const partAt = ({ series, publicId }: PartPlace, page = ''): string => `${seriesAt(series)}/parts/${publicId}${page}`;
+const listAt = ({ part, publicId }: LinePlace, at = 'line'): string => `${partAt(part, '/gather')}#${at}-${publicId}`;
+const savedNow = (ctx: Context): string => `Saved ${clockWords(ctx.clock.now(), signedIn(ctx).timeZone)}`;
+
+export const workroom = {
+  createSeries: formAction(NewSeriesForm, async (input, ctx) => {
+    const { slug } = await createSeries(ctx, input);
+    return { to: seriesAt(slug), said: 'The series is made. Nobody but you sees it yet.' };
+  }),
+  saveDetails: formAction(SeriesDetailsForm, async (input, ctx) => {
+    await saveSeriesDetails(ctx, input);
+    return { to: seriesAt(input.series, '#words'), said: savedNow(ctx) };
+  }),
+  publish: formAction(SeriesForm, async ({ series }, ctx) => {
+    await publishSeries(ctx, series);
+    return { to: seriesAt(series), said: 'Published. Students read it from now on.' };
+  }),
+  takeBack: formAction(SeriesForm, async ({ series }, ctx) => {
+    await takeBackSeries(ctx, series);
+    return { to: seriesAt(series), said: 'Taken back to draft. Who has a seat keeps it.' };
+  }),
+
+  addPart: formAction(NewLessonForm, async (input, ctx) => {
+    const part = await addLesson(ctx, input);
+    return { to: seriesAt(part.series, `#part-${part.publicId}`), said: `Part ${part.number} put in.` };
+  }),
+  movePart: formAction(MoveLessonForm, async (input, ctx) => {
+    const part = await moveLesson(ctx, input);
+    return { to: seriesAt(part.series, `#${input.by ?? 'part'}-${part.publicId}`), said: `“${part.title}” is now Part ${part.number}.` };
+  }),
+  takeOutPart: formAction(LessonForm, async ({ lesson }, ctx) => {
+    const part = await takeOutLesson(ctx, lesson);
+    return { to: `${seriesAt(part.series)}?out=${part.publicId}#parts` };
+  }),
+  putBackPart: formAction(LessonForm, async ({ lesson }, ctx) => {
+    const part = await putBackLesson(ctx, lesson);
+    return { to: seriesAt(part.series, `#part-${part.publicId}`), said: `“${part.title}” is back as Part ${part.number}.` };
+  }),
+
+  saveDraft: formAction(LessonDraftForm, async (input, ctx) => {
+    const { part } = await saveLessonDraft(ctx, input);
+    return { to: partAt(part), said: savedNow(ctx) };
+  }),
+  saveSettings: formAction(LessonSettingsForm, async (input, ctx) => {
+    const part = await saveLessonSettings(ctx, input);
+    return { to: partAt(part, '/settings'), said: savedNow(ctx) };
+  }),
+
+  addLine: formAction(NewGatheringForm, async (input, ctx) => {
+    const line = await addGatheringItem(ctx, input);
+    return { to: listAt(line), said: `${line.name} put on the list.` };
+  }),
+  saveLine: formAction(GatheringForm, async (input, ctx) => {
+    const line = await saveGatheringItem(ctx, input);
+    return { to: listAt(line), said: savedNow(ctx) };
+  }),
+  moveLine: formAction(MoveGatheringForm, async ({ item, by }, ctx) => {
+    const line = await moveGatheringItem(ctx, item, by);
+    return { to: listAt(line, by), said: `${line.name} is now line ${line.number}.` };
+  }),
+  takeOutLine: formAction(GatheringItemForm, async ({ item }, ctx) => {
+    const line = await takeOutGatheringItem(ctx, item);
+    return { to: partAt(line.part, '/gather'), said: `${line.name} taken out.` };
+  }),
+};
