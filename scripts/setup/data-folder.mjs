@@ -13,19 +13,26 @@ const LEAST_FREE_BYTES = 1_000_000_000;
  */
 export function prepareFolder(folder, setting) {
   try {
-    mkdirSync(folder, { recursive: true });
+    makeFolder(folder);
     const probe = path.join(folder, `.probe-${process.pid}`);
     writeFileSync(probe, 'x');
     rmSync(probe);
   } catch (error) {
     const code = error instanceof Error && 'code' in error ? error.code : '';
     if (code === 'ENOSPC') throw new Refusal(`The disk that holds ${folder} is full. Make room and start again.`);
-    throw new Refusal(`${setting}: the folder ${folder} cannot be written to (${String(code)}).`);
+    throw new Refusal(`${setting}: the folder ${folder} cannot be made or written to (${String(code)}).`);
   }
   const { bavail, bsize } = statfsSync(folder);
   if (bavail * bsize < LEAST_FREE_BYTES) {
     throw new Refusal(`The disk that holds ${folder} is nearly full: ${Math.floor(bavail * bsize / 1e6)} MB are left, ${LEAST_FREE_BYTES / 1e6} MB are needed. Make room and start again.`);
   }
+}
+
+/** One folder after the other: Node's own `recursive` never comes back where the system lets nothing be made. @param {string} folder */
+function makeFolder(folder) {
+  if (existsSync(folder)) return;
+  makeFolder(path.dirname(folder));
+  mkdirSync(folder);
 }
 
 /**

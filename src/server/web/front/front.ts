@@ -35,6 +35,7 @@ export interface ServingSettings extends FrontSettings {
 export function developmentFront(settings: FrontSettings): Handler {
   return chain([
     securityHeaders(false),
+    health([], () => false),
     knownMethod,
     canonicalPath,
     knownHost(settings),
