@@ -8,6 +8,12 @@ declare namespace App {
     /** A sentence left by the page before: what was done. */
     said: string | null;
     /** Why this request was refused, for the page that says so. */
-    refusal?: { status: number; says: string; requestId: string };
+    refusal?: {
+      status: number;
+      says: string;
+      requestId: string;
+      /** Where to try the same once more; null when it was a form. */
+      again: string | null;
+    };
   }
 }

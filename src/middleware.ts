@@ -39,7 +39,7 @@ export const onRequest = defineMiddleware(async (context, next) => {
     const answer = gate(rule, actor);
     if (answer === 'nothing-here') throw new AppError('NOT_FOUND');
     if (answer === 'sign-in-first') throw new AppError('UNAUTHENTICATED');
-    if (answer === 'not-yours') throw new AppError('FORBIDDEN');
+    if (answer === 'not-yours') throw new AppError('FORBIDDEN', { says: 'This page belongs to another workroom.' });
     const response = (await answerFormAction(context, next)) ?? (await next());
     return withHeaders(response, actor !== null);
   } catch (error) {
@@ -113,17 +113,19 @@ function pageOfForm({ routePattern, url, request }: APIContext): string {
 
 async function pageForError(context: APIContext, error: unknown, requestId: string): Promise<Response> {
   const known = knownError(error);
+  const asked = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : null;
   if (known.code === 'UNAUTHENTICATED' || known.code === 'PROOF_NEEDED') {
     // A form's own page is where its action stands; the name of the action itself is not come back to.
-    const back = context.request.method === 'GET' ? `${context.url.pathname}${context.url.search}` : pageOfForm(context);
+    const back = asked ?? pageOfForm(context);
     return context.redirect(`${known.code === 'UNAUTHENTICATED' ? '/sign-in' : '/prove'}?to=${encodeURIComponent(back)}`, 303);
   }
   // An empty 404 makes Astro show its 404 page.
   if (known.code === 'NOT_FOUND' || known.code === 'GONE') return new Response(null, { status: 404 });
-  context.locals.refusal = { status: known.status, says: known.says, requestId };
+  context.locals.refusal = { status: known.status, says: known.says, requestId, again: asked };
   if (known.code === 'BUG') console.error(JSON.stringify({ level: 'error', requestId, path: context.routePattern, message: error instanceof Error ? error.stack : String(error) }));
   try {
     const page = await context.rewrite(new Request(new URL('/refused', context.url), { method: 'GET', headers: { accept: 'text/html' } }));
+    if (known.retryAfterSeconds !== undefined) page.headers.set('retry-after', String(known.retryAfterSeconds));
     return withHeaders(new Response(page.body, { status: known.status, headers: page.headers }), true);
   } catch {
     return new Response(null, { status: 500 });

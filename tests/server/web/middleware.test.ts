@@ -90,6 +90,12 @@ describe('a request', () => {
     expect(response.headers.get('location')).toBe('/sign-in?to=%2Faccount');
   });
 
+  test('of a student to a workroom is refused, in words', async () => {
+    const { response, context } = await ask({ route: '/workroom/bench', cookies: await cookiesOf(await buildUser()) });
+    expect(response.status).toBe(403);
+    expect(context.locals.refusal?.says).toBe('This page belongs to another workroom.');
+  });
+
   test('to a route in no table, and to the office by anybody but the steward, finds nothing', async () => {
     const student = await cookiesOf(await buildUser());
     for (const given of [{ route: '/no-such-route' }, { route: '/office', cookies: student }]) {
@@ -191,13 +197,13 @@ describe('a page', () => {
     logged.mockImplementation(() => undefined);
     const { response, context, text } = await ask({ route: '/sign-in', page: () => { throw new Error('secret of the house'); } });
     expect([response.status, text]).toEqual([500, 'refused at /refused']);
-    expect(context.locals.refusal).toMatchObject({ status: 500, requestId: expect.stringMatching(/^[0-9a-f-]{36}$/) });
+    expect(context.locals.refusal).toMatchObject({ status: 500, again: '/sign-in', requestId: expect.stringMatching(/^[0-9a-f-]{36}$/) });
     expect(context.locals.refusal?.says).not.toContain('secret');
   });
 
   test('that must wait says so, and that of a refusal is let through without asking again', async () => {
-    const { response, context } = await ask({ route: '/sign-in', page: () => { throw new AppError('UNAVAILABLE'); } });
-    expect(response.status).toBe(503);
+    const { response, context } = await ask({ route: '/sign-in', page: () => { throw new AppError('UNAVAILABLE', { retryAfterSeconds: 5 }); } });
+    expect([response.status, response.headers.get('retry-after')]).toEqual([503, '5']);
     expect(logged).not.toHaveBeenCalled();
     const again = await onRequest({ ...context, routePattern: '/refused' } as unknown as APIContext, async () => new Response('why'));
     expect(again instanceof Response && (await again.text())).toBe('why');
