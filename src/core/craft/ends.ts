@@ -24,10 +24,13 @@ export function endsSuit(ends: number, together: EndsTogether, parity: Parity): 
   return (ends / together) % 2 === (parity === 'even' ? 0 : 1);
 }
 
-/** Whole ends, raised one by one until every demand holds: at most 3 more. */
+/** Doubled ends whose number of pairs must be even come round every fourth end. */
+const MOST_RAISED = 3;
+
+/** Whole ends, raised one by one until every demand holds. */
 export function endsFor(raw: number, together: EndsTogether, parity: Parity): { readonly count: number; readonly raisedBy: number } {
   const rounded = roundHalfUp(raw);
-  let count = rounded;
-  while (!endsSuit(count, together, parity)) count += 1;
-  return { count, raisedBy: count - rounded };
+  let raisedBy = 0;
+  while (raisedBy < MOST_RAISED && !endsSuit(rounded + raisedBy, together, parity)) raisedBy += 1;
+  return { count: rounded + raisedBy, raisedBy };
 }

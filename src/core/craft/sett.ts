@@ -53,7 +53,7 @@ export function strandsFor(spacingMm: number, warpDiameterMm: number, strandDiam
 }
 
 /** Loft tightness up to which a weft still beats down well; the canon of tapestry is 1, hangings lie near a half. */
-const THICK_FROM = 0.6;
+const THICK_FROM = 0.65;
 
 export type SpacingAdvice = 'too-thick' | 'suits' | 'too-thin';
 

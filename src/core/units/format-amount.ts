@@ -102,8 +102,8 @@ function massParts(grams: number, units: Units): AmountPart[] {
   return withUnit([number(decimal(grams, grams < 1 ? 1 : 0))], 'g');
 }
 
-/** Minutes below an hour, hours and tens of minutes below five, half hours from there on. */
-function hourParts(hours: number): AmountPart[] {
+/** The likely time by itself: minutes below an hour, hours and tens of minutes below five, half hours from there on. */
+export function formatHours(hours: number): AmountPart[] {
   const minutes = roundUpTo(hours * 60, 10);
   if (minutes < 60) return withUnit([number(String(minutes))], 'min');
   if (minutes >= 300) {
@@ -115,10 +115,14 @@ function hourParts(hours: number): AmountPart[] {
   return rest === 0 ? whole : [...whole, words(NO_BREAK), number(String(rest))];
 }
 
-/** Hands differ: the likely time never stands alone. */
+/** Whole hours between which most hands lie: `3 to 12`. */
+export function hoursRange(low: number, high: number): string {
+  return `${String(Math.floor(low))} to ${String(Math.ceil(high))}`.replaceAll(' ', NO_BREAK);
+}
+
+/** Hands differ: the likely time comes with its range. */
 function timeParts({ hours, low, high }: Extract<Quantity, { kind: 'time' }>): AmountPart[] {
-  const range = `${String(Math.floor(low))} to ${String(Math.ceil(high))}`;
-  return [...hourParts(hours), words(` (${range.replaceAll(' ', NO_BREAK)})`)];
+  return [...formatHours(hours), words(` (${hoursRange(low, high)})`)];
 }
 
 function sizeParts({ widthMm, heightMm, use }: Extract<Quantity, { kind: 'size' }>, units: Units): AmountPart[] {

@@ -37,7 +37,7 @@ const allowance = (name: string): NumberRule => ({ name, min: 0, max: LONGEST_MM
 const share = (name: string, max: number): NumberRule => ({ name, min: 0, max, unit: 'share' });
 
 /** Draw-in stays below 40 %: at that the cloth would close to a cord. */
-const DRAW_IN = share('Draw-in', 0.399_999);
+const DRAW_IN: NumberRule = { ...share('Draw-in', 0.4), maxIsOut: true };
 const NAIL_PITCH: NumberRule = { name: 'From nail to nail', min: 1, max: 100, unit: 'mm' };
 const NTH_NAIL: NumberRule = { name: 'Every so-many-th nail', min: 1, max: 50, whole: true };
 const END_COUNT: NumberRule = { name: 'Number of ends', ...END_RANGE, whole: true };

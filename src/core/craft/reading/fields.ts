@@ -15,6 +15,8 @@ export interface NumberRule {
   /** Least and greatest value that works. A `min` of `'over-zero'` takes everything above 0. */
   readonly min: number | 'over-zero';
   readonly max: number;
+  /** The greatest value itself does not work any more. */
+  readonly maxIsOut?: true;
   readonly unit?: 'mm' | 'share' | 'g' | 'm' | 'tex';
   readonly whole?: true;
 }
@@ -39,7 +41,13 @@ function describeLimit(value: number, rule: NumberRule, findings: Findings, roun
 function rangeMessage(rule: NumberRule, findings: Findings): string {
   const max = describeLimit(rule.max, rule, findings, 'down');
   if (rule.min === 'over-zero') return `${rule.name}: anything above 0, up to ${max}, works.`;
-  return `${rule.name}: between ${describeLimit(rule.min, rule, findings, 'up')} and ${max} works.`;
+  const min = describeLimit(rule.min, rule, findings, 'up');
+  return rule.maxIsOut === true ? `${rule.name}: from ${min} to less than ${max} works.` : `${rule.name}: between ${min} and ${max} works.`;
+}
+
+function isInRange(value: number, { min, max, maxIsOut }: NumberRule): boolean {
+  const isOverMin = min === 'over-zero' ? value > 0 : value >= min;
+  return isOverMin && (maxIsOut === true ? value < max : value <= max);
 }
 
 /** The number at a path, or 0 after a problem has been reported. */
@@ -48,7 +56,7 @@ export function checkNumber(value: unknown, path: string, rule: NumberRule, find
     findings.reject('E_NUM', path, `${rule.name} is missing. Give it as a number.`);
   } else if (typeof value !== 'number' || !Number.isFinite(value)) {
     findings.reject('E_NUM', path, `${rule.name} is not a number. Give it as a plain number, such as 12.5.`);
-  } else if (value < (rule.min === 'over-zero' ? 0 : rule.min) || value > rule.max || (rule.min === 'over-zero' && value === 0)) {
+  } else if (!isInRange(value, rule)) {
     findings.reject('E_RANGE', path, rangeMessage(rule, findings));
   } else if (rule.whole === true && !Number.isInteger(value)) {
     findings.reject('E_COUNT', path, `${rule.name} must be a whole number.`);

@@ -94,16 +94,25 @@ export class Findings {
     return succeed(value, this.#warnings);
   }
 
-  /** A length for a message: millimetres below ten centimetres, else centimetres; or inches. */
-  length(mm: number, round: 'nearest' | 'up' | 'down' = 'nearest'): string {
+  /** A length for a message: millimetres below ten centimetres, metres from five, else centimetres; or inches. */
+  length(mm: number, round: Rounding = 'nearest'): string {
     if (this.units === 'in') {
       const inches = round === 'down' ? Math.floor((mm / MM_PER_INCH) * 16 + 1e-9) / 16 : mm / MM_PER_INCH;
       return `${inchesText(toInches(inches, 16, round === 'up' ? 'up' : 'nearest'))} in`;
     }
-    const tenths = { nearest: Math.round, up: (x: number) => Math.ceil(x - 1e-9), down: (x: number) => Math.floor(x + 1e-9) }[round];
-    return mm < 100 ? `${String(tenths(mm * 10) / 10)} mm` : `${String(tenths(mm) / 10)} cm`;
+    const whole = ROUNDINGS[round];
+    if (mm < 100) return `${String(whole(mm * 10) / 10)} mm`;
+    return mm < 5000 ? `${String(whole(mm) / 10)} cm` : `${String(whole(mm / 10) / 100)} m`;
   }
 }
+
+type Rounding = 'nearest' | 'up' | 'down';
+
+const ROUNDINGS: Readonly<Record<Rounding, (x: number) => number>> = {
+  nearest: Math.round,
+  up: (x) => Math.ceil(x - 1e-9),
+  down: (x) => Math.floor(x + 1e-9),
+};
 
 /** JSON pointer of a key or index below `path` (RFC 6901). */
 export function below(path: string, key: string | number): string {

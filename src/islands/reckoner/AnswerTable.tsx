@@ -1,0 +1,44 @@
+import type { AnswerLine, Section } from '#core/reckoner/answer-line.ts';
+import { formatAmount } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+import { Parts } from '#islands/ui/Parts.tsx';
+
+/** How sure an answer is, as short as a column needs it. */
+const TRUST_WORDS: Readonly<Record<AnswerLine['trust'], string>> = { measured: 'Measured', label: 'From the label', formula: 'Reckoned', class: 'From a table, roughly' };
+
+function Value({ value, units }: { value: AnswerLine['value']; units: Units }) {
+  return value.kind === 'words' ? value.words : <Parts parts={formatAmount(value, units)} />;
+}
+
+/** Amounts, each with the way it was got, and what is worth knowing about them. */
+export function AnswerTable({ caption, section, units }: { caption: string; section: Section; units: Units }) {
+  if (section.lines.length === 0) return <p className="quiet">The answer comes when every field can be used.</p>;
+  return (
+    <>
+      {section.notes.length > 0 && (
+        <ul className="mb-4 grid gap-2">
+          {section.notes.map((note) => <li key={note} className="border-l-2 border-ink pl-3">{note}</li>)}
+        </ul>
+      )}
+      <table className="table dense w-full">
+        <caption className="hide">{caption}</caption>
+        <thead>
+          <tr><th scope="col">Amount, and how it was got</th><th scope="col" className="num">For you</th></tr>
+        </thead>
+        <tbody>
+          {section.lines.map(({ label, value, how, trust }) => (
+            <tr key={label}>
+              <th scope="row">
+                <span className="grid gap-x-5 desk:grid-cols-[15em_minmax(0,1fr)]">
+                  {label}
+                  <span className="small quiet font-normal">{TRUST_WORDS[trust]}: {how}</span>
+                </span>
+              </th>
+              <td className="num font-semibold"><Value value={value} units={units} /></td>
+            </tr>
+          ))}
+        </tbody>
+      </table>
+    </>
+  );
+}

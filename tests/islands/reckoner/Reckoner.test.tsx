@@ -1,0 +1,74 @@
+import { cleanup, render, screen, within } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { renderToString } from 'react-dom/server';
+import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { RECKONER_DEFAULTS, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
+import { Reckoner } from '#islands/reckoner/Reckoner.tsx';
+
+const open = (typed: Partial<ReckonerForm> = {}) => {
+  render(<Reckoner initial={{ ...RECKONER_DEFAULTS, ...typed }} />);
+  return userEvent.setup();
+};
+/** What stands beside a line of an answer. */
+const told = (part: string, line: RegExp): string => {
+  const table = within(screen.getByRole('region', { name: part })).getByRole('table');
+  return within(table).getByRole('row', { name: line }).querySelector('td')?.textContent.replaceAll('\u00a0', ' ') ?? '';
+};
+
+afterEach(cleanup);
+beforeEach(() => { history.replaceState(null, '', '/reckoner'); });
+
+describe('the reckoner', () => {
+  test('answers while one types', async () => {
+    const user = open();
+    expect(told('Ends and spacing', /^Warp ends/)).toBe('62 ends');
+    await user.clear(screen.getByLabelText('Finished width'));
+    await user.type(screen.getByLabelText('Finished width'), '20');
+    expect(told('Ends and spacing', /^Warp ends/)).toBe('42 ends');
+    expect(screen.getByRole('status').textContent).toContain('42');
+  });
+
+  test('says what is wrong at the field, keeps what was typed, and goes on answering the rest', async () => {
+    const user = open();
+    await user.clear(screen.getByLabelText('Frame, nail to nail'));
+    await user.type(screen.getByLabelText('Frame, nail to nail'), '40');
+    const field = screen.getByLabelText('Frame, nail to nail');
+    expect(field).toHaveProperty('value', '40');
+    expect(field.getAttribute('aria-invalid')).toBe('true');
+    expect(document.getElementById(field.getAttribute('aria-describedby') ?? '')?.textContent).toContain('Up to 29.4 cm of cloth fit.');
+    expect(told('One yarn', /^Tex/)).toBe('555.56 tex');
+    expect(screen.getByRole('status').textContent).toBe('One field cannot be used yet.');
+  });
+
+  test('turns what was typed into the other units', async () => {
+    const user = open();
+    await user.click(screen.getByLabelText('in, oz'));
+    expect(screen.getByLabelText('Finished width')).toHaveProperty('value', '11 13/16');
+    expect(told('A whole hanging', /^Warp yarn, by weight/)).toMatch(/oz$/);
+  });
+
+  test('asks for rows and fringe only where they are wanted', async () => {
+    const user = open();
+    expect(screen.queryByLabelText('Rows in a centimetre')).toBeNull();
+    await user.selectOptions(screen.getByLabelText('How rows are beaten'), 'swatch');
+    await user.type(screen.getByLabelText('Rows in a centimetre'), '6');
+    await user.click(screen.getByLabelText('A rya fringe'));
+    expect(told('A whole hanging', /^Fringe: knots/)).toMatch(/^3\d knots$/);
+  });
+
+  test('keeps the address in step, so that it can be sent', async () => {
+    const user = open();
+    await user.clear(screen.getByLabelText('Woven height'));
+    await user.type(screen.getByLabelText('Woven height'), '30');
+    await expect.poll(() => location.search, { timeout: 3000 }).toBe('?height=30');
+  });
+
+  test('drawn on the server it is a form that sends every field by its name', () => {
+    const markup = renderToString(<Reckoner initial={RECKONER_DEFAULTS} />);
+    const form = new DOMParser().parseFromString(markup, 'text/html').querySelector('form');
+    expect(form?.getAttribute('method')).toBe('get');
+    const names = new Set([...(form?.querySelectorAll('[name]') ?? [])].map((field) => field.getAttribute('name')));
+    expect([...names].sort()).toEqual([...Object.keys(RECKONER_DEFAULTS), 'shown'].sort());
+    expect(markup).toContain('62');
+  });
+});
