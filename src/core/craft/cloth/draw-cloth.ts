@@ -15,6 +15,7 @@ import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { drawFellLine } from '#core/craft/cloth/fell-line.ts';
 import { drawCastShadow, drawDowel } from '#core/craft/cloth/hanging.ts';
 import { layBands, type DrawnBands } from '#core/craft/cloth/lay-bands.ts';
+import { layOnLoom } from '#core/craft/cloth/lay-on-loom.ts';
 import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from '#core/craft/cloth/loom-frame.ts';
 import { PathStore, escapeWords, num } from '#core/craft/cloth/markup.ts';
 import { drawPlies } from '#core/craft/cloth/ply.ts';
@@ -134,20 +135,12 @@ function pileBelow(piece: WovenPiece, bands: DrawnBands, weave: Weave): number {
 }
 
 function onLoom(piece: WovenPiece, view: ClothView): Picture {
-  const rail = view.width * 0.05;
-  const loom = piece.loom;
-  const scale = loom === undefined ? (view.width * 0.83) / piece.widthMm : (view.width - 2 * rail) / loom.insideWidthMm;
-  const inset = (view.width - piece.widthMm * scale) / 2;
+  const { rail, inset, nailsTop, nailsBottom, below, frame } = layOnLoom(piece, view.width);
   const weave = weaveOf(piece, view, view.width - 2 * inset);
   const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
-  const nailsTop = rail * 0.7;
-  const below = (loom?.bottomMm ?? 30) * weave.pxPerMm;
-  const span = loom === undefined ? bands.height * 1.32 + below : Math.max(loom.insideHeightMm * weave.pxPerMm, bands.height + below * 1.5);
-  const nailsBottom = nailsTop + span;
   const clothTop = weave.begin === 'foot' ? nailsBottom - below - bands.height : nailsTop + below;
   const cloth = `<g transform="translate(0 ${num(clothTop)})">${bands.markup}${atFell(piece, bands, view, weave, inset)}</g>`;
   const card = weave.begin === 'foot' && below > 8 ? drawSpacerCard(nailsBottom - below, below * 0.8, weave) : '';
-  const frame = nailsBottom + rail * 0.7;
   const height = Math.max(frame, clothTop + bands.height + pileBelow(piece, bands, weave) + 2);
   const body =
     drawFrame(view.width, frame, rail) +
