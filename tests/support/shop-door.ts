@@ -23,15 +23,15 @@ const TRIES = 60;
 const LONGEST_MS = 15_000;
 
 export async function openShopDoor(change: Partial<StandInSettings> = {}): Promise<ShopDoor> {
-  let ctx: Context | undefined;
+  const shop: { ctx?: Context } = {};
   const door = createServer((request, response) => {
     const chunks: Buffer[] = [];
     request.on('data', (chunk: Buffer) => chunks.push(chunk));
     request.on('end', () => {
       const signature = request.headers['stripe-signature'];
       void (async () => {
-        if (ctx === undefined) return 503;
-        const receipt = await recordPaymentEvent(ctx, Buffer.concat(chunks).toString('utf8'), typeof signature === 'string' ? signature : null);
+        if (shop.ctx === undefined) return 503;
+        const receipt = await recordPaymentEvent(shop.ctx, Buffer.concat(chunks).toString('utf8'), typeof signature === 'string' ? signature : null);
         return receipt.ok ? 200 : 400;
       })().catch(() => 503).then((status) => response.writeHead(status).end());
     });
@@ -41,7 +41,7 @@ export async function openShopDoor(change: Partial<StandInSettings> = {}): Promi
   const port = typeof address === 'object' && address !== null ? address.port : 0;
   const trial = await startTrial({ webhookUrl: `http://127.0.0.1:${port}/api/payments/events`, retrySeconds: Array.from({ length: TRIES }, () => 0.05), ...change });
   const nobody = contextOf(null, { payments: trial.payments }, new Date());
-  ctx = nobody;
+  shop.ctx = nobody;
   return {
     ...trial,
     ctx: nobody,

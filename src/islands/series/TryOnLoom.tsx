@@ -54,9 +54,11 @@ function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, 
 
   useEffect(() => {
     if (!own || !alive || !trial.ok) return;
-    if (fitted !== null) setTried({ made: fitted, units: settled.units, own });
+    setTried(fitted === null ? null : { made: fitted, units: settled.units, own });
     history.replaceState(history.state, '', address(settled));
   }, [own, alive, trial]);
+
+  useEffect(() => () => { setTried(null); }, []);
 
   const fields = loomFieldUnits(typed.units);
   const faults = trial.ok ? {} : trial.fields;

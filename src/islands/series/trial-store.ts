@@ -13,7 +13,8 @@ export interface Tried {
 let tried: Tried | null = null;
 const listeners = new Set<() => void>();
 
-export function setTried(next: Tried): void {
+/** Null: nothing that fits is being tried. */
+export function setTried(next: Tried | null): void {
   tried = next;
   for (const listener of listeners) listener();
 }
@@ -23,7 +24,7 @@ function subscribe(listener: () => void): () => void {
   return () => { listeners.delete(listener); };
 }
 
-/** What was tried last in this browser; null until something was, and on the server. */
+/** What fits and is being tried in this browser; null until something is, and on the server. */
 export function useTried(): Tried | null {
   return useSyncExternalStore(subscribe, () => tried, () => null);
 }
