@@ -2,14 +2,15 @@
 import { sessionAdapter } from '#server/auth/lucia.ts';
 import type { WorkerOptions } from '#server/jobs/worker.ts';
 import { lookAtOldOrders } from '#server/use-cases/checkout/look-at-old-orders.ts';
+import { forgetOldLinks } from '#server/use-cases/people/forget-old-links.ts';
 import { forgetOldCounters } from '#server/web/rate-limit.ts';
 
 const HOUR = 3_600;
-
 const FIVE_MINUTES = 300;
 
 export const CHORES: WorkerOptions['chores'] = [
   { everySeconds: FIVE_MINUTES, run: lookAtOldOrders },
   { everySeconds: HOUR, run: () => sessionAdapter.deleteExpiredSessions() },
+  { everySeconds: HOUR, run: forgetOldLinks },
   { everySeconds: HOUR, run: () => forgetOldCounters() },
 ];

@@ -8,14 +8,16 @@ import { listAudit } from '#server/queries/office/list-audit.ts';
 import { listJobs } from '#server/queries/office/list-jobs.ts';
 import { listLetters } from '#server/queries/office/list-letters.ts';
 import { listPeople } from '#server/queries/office/list-people.ts';
+import { appointSteward } from '#server/use-cases/office/appoint-steward.ts';
 import { letInTeacher } from '#server/use-cases/office/let-in-teacher.ts';
 import { restorePerson } from '#server/use-cases/office/restore-person.ts';
 import { sendLetterAgain } from '#server/use-cases/office/send-letter-again.ts';
 import { suspendPerson } from '#server/use-cases/office/suspend-person.ts';
 import { tryJobAgain } from '#server/use-cases/office/try-job-again.ts';
+import { setNewPassword } from '#server/use-cases/people/set-new-password.ts';
 import { contextFor, contextOf, type TestContext } from '../../support/context.ts';
 import { buildEnrolment, buildUser, buildWorkroom } from '../../support/factories.ts';
-import { lettersTo } from '../../support/people.ts';
+import { addressOf, buildUserWithPassword, lettersTo, tokenIn } from '../../support/people.ts';
 
 const asSteward = async (): Promise<TestContext> => contextFor(await buildUser({ isSteward: true, name: 'Pell Harrow' }));
 const workroom = { workroom: 'Driftwood Looms', handle: 'driftwood-looms' };
@@ -121,6 +123,27 @@ describe('suspending', () => {
     const jonas = await buildUser();
     for (let n = 0; n < 2; n += 1) await suspendPerson(ctx, { person: jonas.publicId, reason: 'x' });
     expect(await AuditEntry.count()).toBe(1);
+  });
+});
+
+describe('appointing a steward', () => {
+  test('makes an account that opens by the link alone, with a password fit for a steward', async () => {
+    await appointSteward(contextOf(null), { email: addressOf('pell@office.example'), name: 'Pell Harrow' });
+    expect(await User.findOne()).toMatchObject({ name: 'Pell Harrow', isSteward: true, passwordHash: null });
+    const token = await tokenIn('new-password', 'pell@office.example');
+    await expect(setNewPassword(contextOf(null), { token, password: 'k4vq-zzp2-tm' })).rejects.toMatchObject({ code: 'VALIDATION' });
+    await expect(setNewPassword(contextOf(null), { token, password: 'nine kettles on a beam' })).resolves.toBeUndefined();
+    expect((await listAudit(1)).rows).toMatchObject([{ by: null, action: 'appoint-steward', subjectName: 'Pell Harrow' }]);
+  });
+
+  test('who has an account signs her out everywhere and takes the password she had', async () => {
+    const amara = await buildUserWithPassword();
+    const { token } = await beginSession(amara.id, 'student', '', new Date());
+    await appointSteward(contextOf(null), { email: addressOf(amara.email), name: 'x' });
+    await amara.reload();
+    expect(amara).toMatchObject({ isSteward: true, passwordHash: null });
+    expect(await actorOfToken(token)).toBeNull();
+    expect(await User.count()).toBe(1);
   });
 });
 

@@ -4,6 +4,7 @@ import { actorOfToken, beginSession } from '#server/auth/sessions.ts';
 import { AuditEntry, EmailToken, Job, Mail, Session, type User } from '#server/models/index.ts';
 import { askNewPassword } from '#server/use-cases/people/ask-new-password.ts';
 import { changePassword } from '#server/use-cases/people/change-password.ts';
+import { forgetOldLinks } from '#server/use-cases/people/forget-old-links.ts';
 import { proveSelf } from '#server/use-cases/people/prove-self.ts';
 import { setNewPassword } from '#server/use-cases/people/set-new-password.ts';
 import { contextFor, contextOf, type TestContext } from '../../support/context.ts';
@@ -119,6 +120,16 @@ describe('choosing a new password by a link', () => {
     await user.reload();
     expect(user.emailConfirmedAt).not.toBeNull();
   });
+});
+
+test('links that have ended are forgotten, others are kept', async () => {
+  const [early, late] = [await buildUserWithPassword(), await buildUserWithPassword()];
+  await linkFor(early);
+  const ctx = contextOf(null);
+  ctx.clock.set(new Date(ctx.clock.now().getTime() + 21 * MINUTE_MS));
+  await linkFor(late, ctx);
+  await forgetOldLinks(ctx);
+  expect((await EmailToken.findAll()).map(({ userId }) => userId)).toEqual([late.id]);
 });
 
 describe('changing the password', () => {
