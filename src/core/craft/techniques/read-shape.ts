@@ -16,7 +16,12 @@ const LEAN: NumberRule = { name: 'Lean', min: -LONGEST_MM, max: LONGEST_MM, unit
 
 /** The measures a kind of shape needs; those of another kind are left to be refused as unknown. */
 export function readMeasures(fields: Fields): ShapeMeasures {
-  const shape = fields.choice('shape', 'Shape', KINDS);
+  const shape = fields.findings.soundly(() => fields.choice('shape', 'Shape', KINDS));
+  if (shape === undefined) {
+    // Which measures belong to it cannot be said, so none of them is complained about.
+    for (const key of ['baseMm', 'heightMm', 'radiusMm']) fields.take(key);
+    return { shape: 'circle', radiusMm: 0 };
+  }
   if (shape === 'circle') return { shape, radiusMm: fields.number('radiusMm', RADIUS) };
   return { shape, baseMm: fields.number('baseMm', BASE), heightMm: fields.number('heightMm', SHAPE_HEIGHT) };
 }

@@ -157,9 +157,7 @@ describe('shapes in tabby', () => {
     [{ shape: 'star', yarn: 'red' }, 'E_ENUM /bands/0/shapes/0/shape'],
     [{ shape: 'circle', yarn: 'red' }, 'E_NUM /bands/0/shapes/0/radiusMm'],
   ])('%j is refused', (shape, refusal) => {
-    const [found, ...more] = refusals(shaped(shape));
-    expect(found).toBe(refusal);
-    expect(more.every((other) => other.startsWith('E_NUM'))).toBe(true);
+    expect(refusals(shaped(shape))).toEqual([refusal]);
   });
 
   test('too many of them are refused, none is as good as an empty list', () => {
