@@ -34,6 +34,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
   '/series/[slug]/gather': 'public',
+  '/loom': 'signed-in',
   '/reckoner': 'public',
   '/sign-in': 'public',
   '/sign-up': 'public',
