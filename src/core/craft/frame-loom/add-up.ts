@@ -26,32 +26,32 @@ export interface Workings {
   readonly stacked: readonly StackedBand[];
 }
 
-function planBand({ index, band, heightMm }: StackedBand, woven: Woven): BandPlan {
+/** A band with what it takes. */
+interface WovenBand extends StackedBand {
+  readonly woven: Woven;
+}
+
+function planBand({ index, band, heightMm, woven }: WovenBand): BandPlan {
   const yarnMm: Record<string, number> = {};
   for (const use of woven.uses) yarnMm[use.role] = (yarnMm[use.role] ?? 0) + use.yarnMm;
   return { index, technique: band.technique, heightMm, ...woven.counts, yarnMm };
 }
 
 /** The yarn most picks are woven with; the one woven first where two are alike. */
-function mainWeft(woven: readonly Woven[], laid: DressedLoom): { readonly role: string; readonly rawPicks: number } | undefined {
-  const rows = new Map<string, { rows: number; rawRows: number }>();
-  for (const { picks } of woven) {
-    if (picks === undefined) continue;
-    const sum = rows.get(picks.role) ?? { rows: 0, rawRows: 0 };
-    rows.set(picks.role, { rows: sum.rows + picks.rows, rawRows: sum.rawRows + picks.rawRows });
-  }
-  const [most] = [...rows].sort(([, a], [, b]) => b.rows - a.rows);
-  if (most !== undefined) return { role: most[0], rawPicks: most[1].rawRows };
-  const [only] = laid.picks.keys();
-  return only === undefined ? undefined : { role: only, rawPicks: 0 };
+function mainWeft(bands: readonly WovenBand[], laid: DressedLoom): { readonly role: string; readonly rawPicks: number } {
+  const runs = bands.flatMap(({ woven }) => (woven.picks === undefined ? [] : [woven.picks]));
+  const totals = [...laid.picks.keys()].map((role) => {
+    const own = runs.filter((run) => run.role === role);
+    return { role, rows: own.reduce((sum, { rows }) => sum + rows, 0), rawPicks: own.reduce((sum, { rawRows }) => sum + rawRows, 0) };
+  });
+  return totals.reduce((most, next) => (next.rows > most.rows ? next : most));
 }
 
-function planWeft(woven: readonly Woven[], laid: DressedLoom): WeftPlan | undefined {
-  const main = mainWeft(woven, laid);
-  if (main === undefined) return undefined;
-  const { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm } = picksOn(laid, main.role);
+function planWeft(bands: readonly WovenBand[], laid: DressedLoom): WeftPlan {
+  const { role, rawPicks } = mainWeft(bands, laid);
+  const { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm } = picksOn(laid, role);
   const pickMm = pickLength(laid.workingEnds, { stepMm, turnMm });
-  return { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm, pickMm, rawPicks: main.rawPicks };
+  return { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm, pickMm, rawPicks };
 }
 
 function planCut({ size, hanging, dressed, height }: Workings, massG: number, findings: Findings): CutPlan {
@@ -70,8 +70,8 @@ function planCut({ size, hanging, dressed, height }: Workings, massG: number, fi
   return { spacerCard, dowel: { lengthMm, minDiameterMm }, cordMm: cordLength(spanMm) };
 }
 
-function planHours(woven: readonly Woven[], { dressed, laid }: Workings): Hours {
-  const total = (of: keyof Work): number => woven.reduce((sum, { work }) => sum + (work[of] ?? 0), 0);
+function planHours(bands: readonly WovenBand[], { dressed, laid }: Workings): Hours {
+  const total = (of: keyof Work): number => bands.reduce((sum, { woven }) => sum + (woven.work[of] ?? 0), 0);
   return hoursOf({
     workingEnds: laid.workingEnds,
     warpEnds: dressed.ends.count,
@@ -83,7 +83,8 @@ function planHours(woven: readonly Woven[], { dressed, laid }: Workings): Hours 
   });
 }
 
-function planYarns({ yarns, laid, settings }: Workings, woven: readonly Woven[], findings: Findings): Record<string, YarnPlan> {
+function planYarns(bands: readonly WovenBand[], { yarns, laid, settings }: Workings, findings: Findings): Record<string, YarnPlan> {
+  const woven = bands.map((band) => band.woven);
   const plans: Record<string, YarnPlan> = {};
   for (const [role, yarn] of yarns) {
     if (yarn !== undefined) plans[role] = countYarn(role, yarn, woven, laid, settings, findings);
@@ -91,24 +92,22 @@ function planYarns({ yarns, laid, settings }: Workings, woven: readonly Woven[],
   return plans;
 }
 
-/** Undefined only for a piece whose bands name no yarn at all. */
-export function addUp(workings: Workings, findings: Findings): Omit<Plan, 'warnings'> | undefined {
+/** Needs at least one yarn whose picks are laid, which laying the weft has seen to. */
+export function addUp(workings: Workings, findings: Findings): Omit<Plan, 'warnings'> {
   const { dressed, laid, height, stacked } = workings;
-  const woven = stacked.map(({ band, heightMm }) => techniqueOf(band).weave(band, heightMm, laid));
-  const weft = planWeft(woven, laid);
-  if (weft === undefined) return undefined;
+  const bands = stacked.map((stack) => ({ ...stack, woven: techniqueOf(stack.band).weave(stack.band, stack.heightMm, laid) }));
   const warp = countWarp(workings.warp, workings.loom, dressed, workings.settings, findings);
-  const yarns = planYarns(workings, woven, findings);
+  const yarns = planYarns(bands, workings, findings);
   const massG = Object.values(yarns).reduce((sum, yarn) => sum + yarn.massG, warp.massG);
   return {
     ends: dressed.ends,
     loom: { insideWidthNeededMm: dressed.insideWidthNeededMm, ...height },
-    weft,
+    weft: planWeft(bands, laid),
     warp,
     yarns,
-    bands: stacked.map((band, index) => planBand(band, woven[index] ?? { counts: {}, uses: [], work: {} })),
+    bands: bands.map(planBand),
     cut: planCut(workings, massG, findings),
     massG,
-    hours: planHours(woven, workings),
+    hours: planHours(bands, workings),
   };
 }

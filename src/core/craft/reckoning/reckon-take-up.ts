@@ -3,6 +3,7 @@ import { weftWaveRange, waveOf, type Wave, type WaveRange } from '#core/craft/cr
 import { chooseWeftWave } from '#core/craft/picks.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { fineLength, PICK_SPACING, SPACING, WARP_DIAMETER } from '#core/craft/reckoning/rules.ts';
+import type { WeaveMode } from '#core/craft/piece.ts';
 import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
 import type { Problem } from '#core/outcome.ts';
 
@@ -43,6 +44,16 @@ function readCloth(fields: Fields): Cloth {
   };
 }
 
+/** The wave as given, or as the mode chooses it; undefined where the yarns jam or the given one is refused. */
+function weftWave(given: number | undefined, cloth: Cloth, range: WaveRange, mode: WeaveMode, fields: Fields): number | undefined {
+  if (given !== undefined) return givenWave(given, cloth, range, fields);
+  const chosen = chooseWeftWave(range, cloth.D, mode);
+  if (chosen?.clamped === true) {
+    fields.findings.warn('W_CLAMPED', '/mode', 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
+  }
+  return chosen?.heightMm;
+}
+
 export function reckonTakeUp(fields: Fields): TakeUpAnswer | undefined {
   const { findings } = fields;
   const cloth = findings.soundly(() => readCloth(fields));
@@ -51,17 +62,12 @@ export function reckonTakeUp(fields: Fields): TakeUpAnswer | undefined {
   fields.end();
   if (cloth === undefined || findings.count > 0) return undefined;
   const range = weftWaveRange(cloth.D, cloth.p1, cloth.p2);
-  const chosen = range && (given === undefined ? chooseWeftWave(range, cloth.D, mode) : { heightMm: givenWave(given, cloth, range, fields), clamped: false });
-  if (range === undefined || chosen === undefined) {
+  const heightMm = range && weftWave(given, cloth, range, mode, fields);
+  const weft = heightMm === undefined ? undefined : waveOf(cloth.p1, cloth.D, heightMm);
+  const warp = heightMm === undefined ? undefined : waveOf(cloth.p2, cloth.D, cloth.D - heightMm);
+  if (findings.count > 0) return undefined;
+  if (range === undefined || weft === undefined || warp === undefined) {
     fields.reject('E_JAM', 'warpSpacingMm', 'Yarns this thick cannot lie so close. Set the ends further apart, or take thinner yarn.');
-    return undefined;
-  }
-  if (chosen.heightMm === undefined) return undefined;
-  if (chosen.clamped) findings.warn('W_CLAMPED', '/mode', 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
-  const weft = waveOf(cloth.p1, cloth.D, chosen.heightMm);
-  const warp = waveOf(cloth.p2, cloth.D, cloth.D - chosen.heightMm);
-  if (weft === undefined || warp === undefined) {
-    fields.reject('E_JAM', 'weftSpacingMm', 'Rows this close jam. Let them lie further apart, or take thinner yarn.');
     return undefined;
   }
   return { waveMm: range, weft, warp, warnings: findings.warnings };

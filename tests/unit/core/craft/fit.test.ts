@@ -122,6 +122,17 @@ describe('her own way of making it', () => {
   });
 });
 
+test('a pattern that does not fit its own loom may fit hers, and then nothing can be compared', () => {
+  const tight = { ...PATTERN, loom: { ...PATTERN.loom, insideHeightMm: 300 } };
+  expect(fitted({ loom: { insideHeightMm: 600 } }, tight).changes).toEqual([]);
+});
+
+test('nails far closer than the pattern’s are counted in words as far as words go', () => {
+  expect(fitted({ loom: { nailPitchMm: 1 } }).changes).toEqual(['The warp goes round every tenth nail.']);
+  const wide = { ...PATTERN, loom: { ...PATTERN.loom, nailPitchMm: 12 } };
+  expect(fitted({ loom: { nailPitchMm: 1 } }, wide).changes).toEqual(['The warp goes round every 12th nail.']);
+});
+
 describe('a loom that is too small', () => {
   test('names the largest piece it holds', () => {
     expect(problemsWith({ loom: { insideWidthMm: 280 } })).toEqual(['E_FIT /loom/insideWidthMm The loom is 28 cm inside. The piece needs 35 cm. At this spacing up to 23.5 cm fit.']);

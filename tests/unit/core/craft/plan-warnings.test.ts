@@ -95,6 +95,7 @@ describe('a band', () => {
     const warnings = planOf({ ...pieceOf(rya, { ...rya, legEnds: 1 }, soumak), warp: { yarn: { tex: 400 }, endCount: 61 } }).warnings;
     expect(warnings.map(({ code, path }) => `${code} ${path}`)).toEqual(['W_PLAIN_END /bands/0/legEnds', 'W_PLAIN_END /bands/1/legEnds', 'W_SHORT_STITCH /bands/2/over']);
     expect(warnings[0]?.message).toContain('One end stays without a knot');
+    expect(warningWords(pieceOf(rya), 'W_PLAIN_END')[0]).toContain('2 ends stay without a knot');
   });
 });
 

@@ -101,6 +101,27 @@ describe('what is missing or not known', () => {
   });
 });
 
+describe('a yarn that cannot be', () => {
+  test.each([
+    [{ count: { text: '0.001', system: 'ne-cotton' } }, 'E_RANGE /yarns/ground/count/text'],
+    [{ count: { text: '8/2', system: 'silk' } }, 'E_ENUM /yarns/ground/count/system'],
+    [{ count: { text: 8, system: 'nm' } }, 'E_ENUM /yarns/ground/count/text'],
+    [{ count: '8/2' }, 'E_ENUM /yarns/ground/count'],
+    [{ tex: 400, ball: { metres: 1, grams: 100_000 } }, 'E_RANGE /yarns/ground/ball'],
+    [{ tex: 400, ball: { metres: 100 } }, 'E_NUM /yarns/ground/ball/grams'],
+    [{ tex: 400, ball: { metres: 0, grams: 100 } }, 'E_RANGE /yarns/ground/ball/metres'],
+    [{ tex: 400, colour: 'blue' }, 'E_ENUM /yarns/ground/colour'],
+    [{ tex: 400, colour: '#6d93bcff' }, 'E_RANGE /yarns/ground/colour'],
+    [{ tex: 400, label: 'x'.repeat(121) }, 'E_RANGE /yarns/ground/label'],
+    [{ tex: 400, label: 7 }, 'E_ENUM /yarns/ground/label'],
+    [{ tex: 400, strands: 1.5 }, 'E_COUNT /yarns/ground/strands'],
+    [{ tex: 400, ashenhurstK: 1.1 }, 'E_RANGE /yarns/ground/ashenhurstK'],
+    [{ tex: 400, wrapsPerInch: 61 }, 'E_RANGE /yarns/ground/wrapsPerInch'],
+  ])('%j', (yarn, refusal) => {
+    expect(refusals({ ...PLAIN_PIECE, yarns: { ground: yarn } })).toEqual([refusal]);
+  });
+});
+
 describe('what does not fit', () => {
   test('a loom that is too low names what it needs and the largest cloth it holds', () => {
     const [problem] = problemsOf(withValue('loom.insideHeightMm', 400));
@@ -114,6 +135,11 @@ describe('what does not fit', () => {
     expect(problem?.message).toBe('The loom is 20 cm inside. The piece needs 35 cm. At this spacing up to 15.6 cm fit.');
     const narrower = withValue('size.widthMm', 156, withValue('loom.insideWidthMm', 200) as object);
     expect(refusals(narrower)).toEqual([]);
+  });
+
+  test('a loom on which one steps along two nails holds half the ends', () => {
+    const twoNail = { ...PLAIN_PIECE, loom: { ...PLAIN_PIECE.loom, warping: 'two-nail', insideWidthMm: 200 } };
+    expect(problemsOf(twoNail)[0]?.message).toContain('At this spacing up to 15.6 cm fit.');
   });
 
   test('in inches it says so in inches', () => {
