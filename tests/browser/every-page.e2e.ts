@@ -1,0 +1,73 @@
+/**
+ * Every page a person can open, in both schemes, wide and on a phone: nothing that a program can find stands between it
+ * and those who hear or zoom it, nothing scrolls sideways even at 320 px, nothing is said in the console, and the
+ * content policy has nothing to report.
+ */
+import { ROUTE_RULES } from '#server/web/route-rules.ts';
+import { stateOf, type DemoName } from './support/demo-people.ts';
+import { demoPlaces, type DemoPlaces } from './support/demo-places.ts';
+import { expect, expectFaultless, test } from './support/test.ts';
+
+type Address = string | ((places: DemoPlaces) => string);
+
+/** By whom each page is looked at: by those for whom it is fullest. */
+const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visitor', at: Address])[]>> = {
+  '/': [['visitor', '/']],
+  '/404': [['visitor', '/nothing-here']],
+  '/account': [['maud', '/account']],
+  '/forgotten': [['visitor', '/forgotten']],
+  '/handbook': [['visitor', '/handbook']],
+  '/handbook/[...slug]': [['visitor', '/handbook/tabby'], ['visitor', '/handbook/yarn-counts']],
+  '/loom': [['maud', '/loom'], ['amara', '/loom']],
+  '/office': [['pell', '/office']],
+  '/office/jobs': [['pell', '/office/jobs']],
+  '/office/log': [['pell', '/office/log']],
+  '/office/mail': [['pell', '/office/mail']],
+  '/office/people': [['pell', '/office/people']],
+  '/office/people/[person]': [['pell', ({ person }) => `/office/people/${person}`]],
+  '/prove': [['ilse', '/prove']],
+  '/reckoner': [['visitor', '/reckoner']],
+  '/refused': [['maud', '/workroom/bench']],
+  '/series': [['visitor', '/series']],
+  '/series/[slug]': [['visitor', '/series/low-tide'], ['maud', '/series/low-tide']],
+  '/series/[slug]/[part]': [['visitor', '/series/low-tide/1'], ['maud', '/series/low-tide/2'], ['maud', '/series/low-tide/3'], ['amara', '/series/low-tide/2'], ['ilse', '/series/low-tide/6']],
+  '/series/[slug]/gather': [['visitor', '/series/low-tide/gather'], ['maud', '/series/low-tide/gather']],
+  '/series/[slug]/seat': [['maud', '/series/low-tide/seat']],
+  '/sign-in': [['visitor', '/sign-in']],
+  '/sign-up': [['visitor', '/sign-up']],
+  '/teachers/[handle]': [['visitor', '/teachers/saltmarsh']],
+  '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
+};
+
+/** Answers that are no pages of their own, or only after a step that a journey tests. */
+const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/media/[id]/[file]', '/sign-out']);
+
+test('every page of the program is looked at', () => {
+  const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));
+  expect(Object.keys(PAGES).toSorted()).toEqual(patterns.toSorted());
+});
+
+const WIDTHS = [1280, 390] as const;
+const NARROWEST = 320;
+
+for (const colorScheme of ['light', 'dark'] as const) {
+  for (const [pattern, looks] of Object.entries(PAGES)) {
+    for (const [who, at] of looks) {
+      test.describe(() => {
+        test.use({ colorScheme, ...(who === 'visitor' ? {} : { storageState: stateOf(who) }) });
+        test(`${pattern} for ${who} (${typeof at === 'string' ? at : pattern}) by ${colorScheme === 'light' ? 'day' : 'evening'}`, async ({ page }) => {
+          const path = typeof at === 'string' ? at : at(await demoPlaces());
+          await page.setViewportSize({ width: WIDTHS[0], height: 900 });
+          await page.goto(path);
+          for (const width of WIDTHS) {
+            await page.setViewportSize({ width, height: 900 });
+            await expectFaultless(page);
+          }
+          await page.setViewportSize({ width: NARROWEST, height: 640 });
+          const sideways = await page.evaluate(() => document.documentElement.scrollWidth - document.documentElement.clientWidth);
+          expect(sideways, `${path} scrolls sideways at ${NARROWEST} px`).toBeLessThanOrEqual(0);
+        });
+      });
+    }
+  }
+}

@@ -1,0 +1,111 @@
+/**
+ * Every route as everybody. The list of routes is the program's own table of rules, so that a route without a line here
+ * fails; what each line expects is written out, since it is what people may rely on.
+ */
+import { expect, request, test } from 'playwright/test';
+import { ROUTE_RULES } from '#server/web/route-rules.ts';
+import { cookieOf, type DemoName } from './support/demo-people.ts';
+import { demoPlaces, type DemoPlaces } from './support/demo-places.ts';
+
+/** Amara has no seat, Maud has one and is in Part 2, Teodor is another teacher, Ilse owns Low Tide, Wren helps her, Pell is the steward. */
+const ASKERS = ['visitor', 'amara', 'maud', 'teodor', 'ilse', 'wren', 'pell'] as const satisfies readonly (DemoName | 'visitor')[];
+
+interface Line {
+  /** Address with the demo world's own ids put in. */
+  readonly at: string | ((places: DemoPlaces) => string);
+  /** Statuses in the order of ASKERS; a single one stands for all. */
+  readonly answers: string;
+  /** Asked by POST with an empty body of JSON. */
+  readonly post?: true;
+}
+
+const EVERYBODY = '200';
+const SIGNED_IN = '303 200 200 200 200 200 200';
+const TEACHERS = '303 403 403 200 200 403 403';
+const BENCH = '303 403 403 200 200 200 403';
+const OWNER = '303 403 403 404 200 403 403';
+const STEWARD = '303 404 404 404 404 404 200';
+const WITH_SEAT = '303 404 200 404 200 200 404';
+
+const ROUTES: Readonly<Record<string, readonly Line[]>> = {
+  '/': [{ at: '/', answers: EVERYBODY }],
+  '/404': [{ at: '/404', answers: '404' }],
+  '/500': [{ at: '/500', answers: '500' }],
+  '/account': [{ at: '/account', answers: SIGNED_IN }],
+  '/api/payments/events': [{ at: '/api/payments/events', post: true, answers: '400' }],
+  '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
+  '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
+  '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
+  '/api/ticks': [{ at: '/api/ticks', post: true, answers: '401 422 422 422 422 422 422' }],
+  '/confirm/[token]': [{ at: '/confirm/nothing', answers: '404' }],
+  '/forgotten': [{ at: '/forgotten', answers: EVERYBODY }],
+  '/handbook': [{ at: '/handbook', answers: EVERYBODY }],
+  '/handbook/[...slug]': [{ at: '/handbook/tabby', answers: EVERYBODY }, { at: '/handbook/nothing', answers: '404' }],
+  '/loom': [{ at: '/loom', answers: SIGNED_IN }],
+  '/media/[id]/[file]': [
+    { at: ({ photo }) => `/media/${photo}/large`, answers: '404 404 200 404 200 200 404' },
+    { at: ({ freeVideo }) => `/media/${freeVideo}/video`, answers: EVERYBODY },
+    { at: ({ gatedVideo }) => `/media/${gatedVideo}/video`, answers: '404 404 200 404 200 200 404' },
+    { at: ({ gatedVideo }) => `/media/${gatedVideo}/captions`, answers: '404 404 200 404 200 200 404' },
+    { at: ({ photo }) => `/media/${photo}/original`, answers: '404' },
+    { at: `/media/${'0'.repeat(26)}/large`, answers: '404' },
+  ],
+  '/new-password/[token]': [{ at: '/new-password/nothing', answers: '404' }],
+  '/office': [{ at: '/office', answers: STEWARD }],
+  '/office/jobs': [{ at: '/office/jobs', answers: STEWARD }],
+  '/office/log': [{ at: '/office/log', answers: STEWARD }],
+  '/office/mail': [{ at: '/office/mail', answers: STEWARD }],
+  '/office/people': [{ at: '/office/people', answers: STEWARD }],
+  '/office/people/[person]': [{ at: ({ person }) => `/office/people/${person}`, answers: STEWARD }],
+  '/prove': [{ at: '/prove', answers: SIGNED_IN }],
+  '/reckoner': [{ at: '/reckoner', answers: EVERYBODY }],
+  '/refused': [{ at: '/refused', answers: '404' }],
+  '/series': [{ at: '/series', answers: EVERYBODY }],
+  '/series/[slug]': [
+    { at: '/series/low-tide', answers: EVERYBODY },
+    { at: '/series/three-knotted-cords', answers: '404 404 404 200 404 404 404' },
+    { at: '/series/nothing', answers: '404' },
+  ],
+  '/series/[slug]/[part]': [
+    { at: '/series/low-tide/1', answers: EVERYBODY },
+    { at: '/series/low-tide/2', answers: '402 402 200 402 200 200 402' },
+    { at: '/series/low-tide/3', answers: '402 402 403 402 200 200 402' },
+    { at: '/series/low-tide/8', answers: '404' },
+    { at: '/series/three-knotted-cords/1', answers: '404 404 404 200 404 404 404' },
+  ],
+  '/series/[slug]/gather': [{ at: '/series/low-tide/gather', answers: EVERYBODY }],
+  '/series/[slug]/seat': [{ at: '/series/low-tide/seat', answers: SIGNED_IN }],
+  '/sign-in': [{ at: '/sign-in', answers: EVERYBODY }],
+  '/sign-out': [{ at: '/sign-out', answers: '404' }],
+  '/sign-up': [{ at: '/sign-up', answers: EVERYBODY }],
+  '/teachers/[handle]': [{ at: '/teachers/saltmarsh', answers: EVERYBODY }, { at: '/teachers/nobody', answers: '404' }],
+  '/workroom/bench': [{ at: '/workroom/bench', answers: BENCH }],
+};
+
+/** Astro's own doors: actions decide by themselves (their tests are with the use-cases), pictures of the build are public. */
+const ASTROS_OWN = new Set(['/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components']);
+
+test('every route of the program is asked here, and nothing else', () => {
+  const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !ASTROS_OWN.has(pattern));
+  expect(Object.keys(ROUTES).toSorted()).toEqual(patterns.toSorted());
+});
+
+for (const [pattern, lines] of Object.entries(ROUTES)) {
+  test(`${pattern} answers everybody as it should`, async () => {
+    const places = await demoPlaces();
+    for (const { at, answers, post } of lines) {
+      const path = typeof at === 'string' ? at : at(places);
+      const said: number[] = [];
+      for (const asker of ASKERS) {
+        const headers = { 'sec-fetch-site': 'same-origin', ...(asker === 'visitor' ? {} : { cookie: await cookieOf(asker) }) };
+        const context = await request.newContext({ baseURL: process.env['FELLMARK_TEST_URL'] ?? '', extraHTTPHeaders: headers });
+        const answer = post === true ? await context.post(path, { data: {}, maxRedirects: 0 }) : await context.get(path, { maxRedirects: 0 });
+        said.push(answer.status());
+        await context.dispose();
+      }
+      const expected = answers.includes(' ') ? answers : Array.from(ASKERS, () => answers).join(' ');
+      expect(said.join(' '), `${path} as ${ASKERS.join(', ')}`).toBe(expected);
+    }
+  });
+}
+void [TEACHERS, OWNER, WITH_SEAT];
