@@ -3,10 +3,11 @@
  * and those who hear or zoom it, nothing scrolls sideways even at 320 px, nothing is said in the console, and the
  * content policy has nothing to report.
  */
+import { expect } from 'playwright/test';
 import { ROUTE_RULES } from '#server/web/route-rules.ts';
 import { stateOf, type DemoName } from './support/demo-people.ts';
 import { demoPlaces, type DemoPlaces } from './support/demo-places.ts';
-import { expect, expectFaultless, test } from './support/test.ts';
+import { expectFaultless, test } from './support/test.ts';
 
 type Address = string | ((places: DemoPlaces) => string);
 

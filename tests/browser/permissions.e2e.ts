@@ -21,11 +21,8 @@ interface Line {
 
 const EVERYBODY = '200';
 const SIGNED_IN = '303 200 200 200 200 200 200';
-const TEACHERS = '303 403 403 200 200 403 403';
 const BENCH = '303 403 403 200 200 200 403';
-const OWNER = '303 403 403 404 200 403 403';
 const STEWARD = '303 404 404 404 404 404 200';
-const WITH_SEAT = '303 404 200 404 200 200 404';
 
 const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/': [{ at: '/', answers: EVERYBODY }],
@@ -108,4 +105,3 @@ for (const [pattern, lines] of Object.entries(ROUTES)) {
     }
   });
 }
-void [TEACHERS, OWNER, WITH_SEAT];

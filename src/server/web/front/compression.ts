@@ -19,8 +19,8 @@ const FLUSH_AFTER_MS = 20;
 
 /** Compresses the body of answers whose kind and size make it worth while. */
 export const compression: Handler = (request, response, next) => {
-  gateOf(response).beforeHead((head, raw) => {
-    if (!isWorthIt(head)) return undefined;
+  gateOf(response).beforeHead((head, raw, bodyTaken) => {
+    if (bodyTaken || !isWorthIt(head)) return undefined;
     head.setHeader('Vary', varyByEncoding(head.getHeader('vary')));
     const coding = acceptedCoding(headerText(request.headers['accept-encoding']));
     if (coding === undefined || request.method === 'HEAD') return undefined;

@@ -23,8 +23,9 @@ export interface RawResponse extends BodySink {
 /**
  * Told of the head when all its headers are set (read and change them on the response) and none is sent.
  * A returned sink receives the body; with `holdsHead` the head is not sent either, and the sink calls `release`.
+ * `bodyTaken`: a watcher before this one has the body already, so a head must not promise another form of it.
  */
-export type HeadWatcher = (response: ServerResponse, raw: RawResponse) => { sink: BodySink; holdsHead: boolean } | undefined;
+export type HeadWatcher = (response: ServerResponse, raw: RawResponse, bodyTaken: boolean) => { sink: BodySink; holdsHead: boolean } | undefined;
 
 export interface ResponseGate {
   /** Adds a watcher; watchers run in the order added, and the first one that returns a sink has the body. */
@@ -68,7 +69,7 @@ function putUpGate(response: ServerResponse): ResponseGate {
     let held = false;
     let taken = false;
     for (const watcher of watchers) {
-      const outcome = watcher(response, raw);
+      const outcome = watcher(response, raw, taken);
       if (outcome === undefined || taken) continue;
       taken = true;
       sink = outcome.sink;

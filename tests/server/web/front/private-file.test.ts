@@ -9,14 +9,14 @@ const KEY = 'photos/ab/0123.jpg';
 
 let front: RunningFront;
 /** What the endpoint answers with: its key and its status. */
-let answerWith: { key: string; status: number };
+let answerWith: { key: string; status: number; type: string };
 
 beforeEach(async () => {
-  answerWith = { key: KEY, status: 200 };
+  answerWith = { key: KEY, status: 200, type: 'image/jpeg' };
   front = await startFront({
     uploads: { [KEY]: BYTES, '.secret': 'hidden', 'photos/.secret': 'hidden' },
     site: (_request, response) => {
-      response.writeHead(answerWith.status, { 'X-Fellmark-Send': answerWith.key, 'Content-Type': 'image/jpeg', 'Cache-Control': 'private, max-age=3600', Vary: 'Cookie' });
+      response.writeHead(answerWith.status, { 'X-Fellmark-Send': answerWith.key, 'Content-Type': answerWith.type, 'Cache-Control': 'private, max-age=3600', Vary: 'Cookie' });
       response.end();
     },
   });
@@ -32,6 +32,12 @@ describe('a file of a person', () => {
     expect(headers['content-security-policy']).toBe("sandbox; default-src 'none'");
     expect(headers['x-fellmark-send']).toBeUndefined();
     expect(headers['content-encoding']).toBeUndefined();
+  });
+
+  test('that is text, such as captions, comes as it lies on the disk to a browser that would take it compressed', async () => {
+    answerWith.type = 'text/vtt; charset=utf-8';
+    const { headers, bytes } = await front.ask('/media/x', { headers: { 'Accept-Encoding': 'gzip, br' } });
+    expect([headers['content-encoding'], headers['content-length'], bytes.equals(BYTES)]).toEqual([undefined, '1000', true]);
   });
 
   test('is only described when only its head is asked for', async () => {
@@ -84,7 +90,7 @@ describe('a file of a person', () => {
 
   test.each(['photos/none.jpg', 'photos', '../client/x', '/etc/passwd', 'photos/../.secret', '.secret', 'photos/.secret', 'photos\\ab', '', 'photos/%2e%2e/x', 'a\u0001b'.replace('\u0001', ' ')])(
     'a key that names no file of ours ("%s") finds nothing', async (key) => {
-      answerWith = { key, status: 200 };
+      answerWith = { ...answerWith, key };
       const { status, headers, text } = await front.ask('/media/x');
       expect(status).toBe(404);
       expect(headers['x-fellmark-send']).toBeUndefined();
@@ -92,7 +98,7 @@ describe('a file of a person', () => {
     });
 
   test('a refusal is never turned into the file, nor is its key told', async () => {
-    answerWith = { key: KEY, status: 403 };
+    answerWith = { ...answerWith, status: 403 };
     const { status, headers, bytes } = await front.ask('/media/x');
     expect([status, bytes.length, headers['x-fellmark-send']]).toEqual([403, 0, undefined]);
   });
