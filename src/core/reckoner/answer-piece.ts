@@ -1,6 +1,6 @@
 /** A whole small hanging: hem, fringe if wanted, one plain stretch, hem. */
 import { amountOf } from '#core/craft/amounts.ts';
-import type { Band, Piece, Yarn } from '#core/craft/piece.ts';
+import type { Band, Beat, Piece, Yarn } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
 import { fieldOfPath } from '#core/reckoner/field-of-path.ts';
@@ -35,12 +35,25 @@ function readFringe(reader: FormReader): readonly Band[] | undefined {
 /** Stand in for what cannot be read, so that everything else is checked all the same. */
 const STAND_IN = { heightMm: 100, insideHeightMm: 20_000, yarn: { tex: 400 }, beat: { picksPerWeftDiameter: 1 }, fringe: [] } as const;
 
-function readPiece(reader: FormReader, typed: TypedLoom, yarn: Yarn = STAND_IN.yarn): Piece {
-  const heightMm = reader.length('height', 'Height') ?? STAND_IN.heightMm;
-  const insideHeightMm = reader.length('frame-height', 'Height of the frame') ?? STAND_IN.insideHeightMm;
-  const diameterMm = reader.optionalLength('dowel', 'Thickness of the dowel');
-  const beat = readTypedBeat(reader) ?? STAND_IN.beat;
-  const fringe = readFringe(reader) ?? STAND_IN.fringe;
+interface TypedMaking {
+  readonly heightMm: number;
+  readonly insideHeightMm: number;
+  readonly diameterMm: number | undefined;
+  readonly beat: Beat;
+  readonly fringe: readonly Band[];
+}
+
+function readMaking(reader: FormReader): TypedMaking {
+  return {
+    heightMm: reader.length('height', 'Height') ?? STAND_IN.heightMm,
+    insideHeightMm: reader.length('frame-height', 'Height of the frame') ?? STAND_IN.insideHeightMm,
+    diameterMm: reader.optionalLength('dowel', 'Thickness of the dowel'),
+    beat: readTypedBeat(reader) ?? STAND_IN.beat,
+    fringe: readFringe(reader) ?? STAND_IN.fringe,
+  };
+}
+
+function pieceOf({ heightMm, insideHeightMm, diameterMm, beat, fringe }: TypedMaking, typed: TypedLoom, yarn: Yarn = STAND_IN.yarn): Piece {
   const hem: Band = { technique: 'hem-stitch', yarn: 'ground', bundleEnds: 2, reachPicks: 2 };
   return {
     craft: 'frame-loom',
@@ -66,8 +79,9 @@ function linesOf(piece: Piece, plan: Plan): readonly AnswerLine[] {
 }
 
 export function answerPiece(typed: TypedLoom | undefined, yarn: Yarn | undefined, reader: FormReader): PieceSection {
+  const making = readMaking(reader);
   if (typed === undefined) return NO_ANSWER;
-  const piece = readPiece(reader, typed, yarn);
+  const piece = pieceOf(making, typed, yarn);
   const planned = planPiece(piece, reader.units);
   if (!planned.ok) {
     for (const { path, message } of planned.problems) reader.refuse(fieldOfPath(path), message);

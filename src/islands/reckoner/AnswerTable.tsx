@@ -1,6 +1,10 @@
-import type { AnswerLine, Section } from '#core/reckoner/answer-line.ts';
+import { Fragment } from 'react';
+import type { AnswerLine, FieldErrors, Section } from '#core/reckoner/answer-line.ts';
+import { FIELD_LABELS } from '#core/reckoner/field-labels.ts';
+import { RECKONER_FIELDS } from '#core/reckoner/reckoner-form.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
+import { fieldId } from '#islands/ui/field-id.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 
 /** How sure an answer is, as short as a column needs it. */
@@ -10,9 +14,27 @@ function Value({ value, units }: { value: AnswerLine['value']; units: Units }) {
   return value.kind === 'words' ? value.words : <Parts parts={formatAmount(value, units)} />;
 }
 
+/** Stands in for an answer that waits, with the way to every field it may wait for. */
+function Waiting({ errors }: { errors: FieldErrors }) {
+  const fields = RECKONER_FIELDS.filter((field) => errors[field] !== undefined);
+  return (
+    <p className="quiet">
+      This answer waits for {fields.length === 1 ? 'a field that cannot be used yet: ' : 'fields that cannot be used yet: '}
+      {fields.map((field, index) => <Fragment key={field}>{index > 0 && ', '}<a href={`#${fieldId(field)}`}>{FIELD_LABELS[field]}</a></Fragment>)}.
+    </p>
+  );
+}
+
+interface AnswerTableProps {
+  readonly caption: string;
+  readonly section: Section;
+  readonly errors: FieldErrors;
+  readonly units: Units;
+}
+
 /** Amounts, each with the way it was got, and what is worth knowing about them. */
-export function AnswerTable({ caption, section, units }: { caption: string; section: Section; units: Units }) {
-  if (section.lines.length === 0) return <p className="quiet">The answer comes when every field can be used.</p>;
+export function AnswerTable({ caption, section, errors, units }: AnswerTableProps) {
+  if (section.lines.length === 0) return <Waiting errors={errors} />;
   return (
     <>
       {section.notes.length > 0 && (

@@ -7,23 +7,21 @@ export function LoomFields({ hand }: { hand: FormHand }) {
   return (
     <>
       <div className="two">
-        <Field label="Finished width" {...typedField(hand, 'width')} />
-        <Field label="From nail to nail" {...typedField(hand, 'nails')} />
+        <Field {...typedField(hand, 'width')} />
+        <Field {...typedField(hand, 'nails')} />
       </div>
       <Choose
-        legend="The warp goes"
         options={[{ value: 'zigzag', label: 'Round every nail' }, { value: 'two-nail', label: 'Along two nails' }]}
         {...chosenField(hand, 'warping', ['zigzag', 'two-nail'])}
       />
-      <Choose legend="Ends worked" options={[{ value: '1', label: 'Singly' }, { value: '2', label: 'In pairs' }]} {...chosenField(hand, 'together', ['1', '2'])} />
+      <Choose options={[{ value: '1', label: 'Singly' }, { value: '2', label: 'In pairs' }]} {...chosenField(hand, 'together', ['1', '2'])} />
       <Choose
-        legend="Number of ends"
         options={[{ value: 'any', label: 'Any' }, { value: 'even', label: 'Even' }, { value: 'odd', label: 'Odd' }]}
         {...chosenField(hand, 'parity', ['any', 'even', 'odd'])}
       />
       <div className="two">
-        <Field label="Warp yarn" {...typedField(hand, 'warp-tex')} unit="tex" />
-        <Field label="Draws in by" {...typedField(hand, 'draw-in')} unit="%" />
+        <Field {...typedField(hand, 'warp-tex')} unit="tex" />
+        <Field {...typedField(hand, 'draw-in')} unit="%" />
       </div>
     </>
   );

@@ -76,14 +76,14 @@ export function Reckoner({ initial }: { initial: ReckonerForm }) {
       <Choose name="units" legend="Units" quietLegend options={[{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }]} value={units} onChoose={(chosen) => { change(['units', chosen]); }} />
       <p className="hide" role="status">{inWords(answer, form)}</p>
       <Part id="yarn" title="One yarn" says="Every way its thickness is told, and how thick it lies." fields={<YarnFields hand={hand} />}>
-        <AnswerTable caption="The yarn in every count" section={answer.yarn} units={units} />
+        <AnswerTable caption="The yarn in every count" section={answer.yarn} errors={answer.errors} units={units} />
       </Part>
       <Part id="ends" title="Ends and spacing" says="From a width and a row of nails to warp ends." fields={<LoomFields hand={hand} />}>
-        <AnswerTable caption="Ends, nails and spacing" section={answer.ends} units={units} />
+        <AnswerTable caption="Ends, nails and spacing" section={answer.ends} errors={answer.errors} units={units} />
       </Part>
       <Part id="piece" title="A whole hanging" says="Woven in this yarn on these ends. Amounts are those to have in hand, with a reserve." last fields={<PieceFields hand={hand} />}>
         <PieceSum piece={answer.piece} units={units} />
-        <AnswerTable caption="Everything the piece takes" section={answer.piece} units={units} />
+        <AnswerTable caption="Everything the piece takes" section={answer.piece} errors={answer.errors} units={units} />
       </Part>
     </form>
   );

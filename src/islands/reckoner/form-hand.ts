@@ -1,4 +1,5 @@
 import type { FieldErrors } from '#core/reckoner/answer-line.ts';
+import { FIELD_LABELS } from '#core/reckoner/field-labels.ts';
 import { isLengthField, unitOf, unitsOf, type ReckonerField, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
 
 /** What every group of fields is handed. */
@@ -12,6 +13,7 @@ export interface FormHand {
 export function typedField({ form, errors, change }: FormHand, name: ReckonerField) {
   return {
     name,
+    label: FIELD_LABELS[name],
     value: form[name],
     error: errors[name],
     maxLength: 40,
@@ -26,6 +28,7 @@ export function typedField({ form, errors, change }: FormHand, name: ReckonerFie
 export function chosenField<const V extends string>({ form, change }: FormHand, name: ReckonerField, values: readonly V[]) {
   return {
     name,
+    legend: FIELD_LABELS[name],
     value: values.find((value) => value === form[name]) ?? values[0],
     onChoose: (value: V) => { change(name, value); },
   };

@@ -146,7 +146,7 @@ describe('what cannot be used is told at its field', () => {
   });
 
   test('several at once, each at its own field', () => {
-    expect(Object.keys(answerTo({ wraps: '99', strands: 'x', width: '', 'warp-tex': '-1' }).errors).sort()).toEqual(['strands', 'warp-tex', 'width', 'wraps']);
+    expect(Object.keys(answerTo({ wraps: '99', strands: 'x', width: '', 'warp-tex': '-1', beat: 'swatch' }).errors).sort()).toEqual(['strands', 'swatch', 'warp-tex', 'width', 'wraps']);
   });
 
   test('nothing anybody types makes it throw, and what it refuses it says', () => {
