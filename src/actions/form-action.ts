@@ -11,7 +11,7 @@ export interface Done {
   readonly said?: string;
 }
 
-export function formAction<S extends z.ZodTypeAny>(schema: S, work: (input: z.output<S>, ctx: Context, api: ActionAPIContext) => Promise<Done>) {
+export function formAction<T>(schema: z.ZodType<T, z.ZodTypeDef, unknown>, work: (input: T, ctx: Context, api: ActionAPIContext) => Promise<Done>) {
   return defineAction({
     accept: 'form',
     handler: (form: FormData, api): Promise<FormAnswer> => answerForm(schema, form, (input) => work(input, api.locals.ctx, api)),
