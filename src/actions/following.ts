@@ -1,6 +1,8 @@
 import { FinishForm, GatheredForm } from '#contracts/following.ts';
+import { MyPieceForm } from '#contracts/my-piece.ts';
 import { TickInput } from '#contracts/ticks.ts';
 import { stepAnchor } from '#core/lesson-text/tree.ts';
+import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
@@ -22,5 +24,10 @@ export const following = {
     const { number, next } = await finishPart(ctx, input);
     if (!input.done) return { to: `/series/${input.series}/${number}#end`, said: `Part ${number} is open again.` };
     return next === null ? { to: '/loom', said: `Part ${number} is done. The piece is off the loom.` } : { to: `/series/${input.series}/${next}`, said: `Part ${number} is done.` };
+  }),
+
+  savePiece: formAction(MyPieceForm, async (input, ctx) => {
+    await saveMyPiece(ctx, input);
+    return { to: `/series/${input.series}/piece`, said: input.asPattern === undefined ? 'Your piece is kept. Every amount is reckoned for it.' : 'Your piece is as the pattern again.' };
   }),
 };

@@ -34,6 +34,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
   '/series/[slug]/gather': 'public',
+  '/series/[slug]/piece': 'signed-in',
   '/loom': 'signed-in',
   '/reckoner': 'public',
   '/sign-in': 'public',

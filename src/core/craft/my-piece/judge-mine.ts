@@ -1,0 +1,115 @@
+/** What a student's form comes to: her own piece with its plan, or a sentence at every field that stands in the way. */
+import { lengthOf } from '#core/craft/amounts/amount-types.ts';
+import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import type { EndsTogether, Piece, Warping } from '#core/craft/piece.ts';
+import { readText } from '#core/craft/piece-form/field-text.ts';
+import { readTyped } from '#core/craft/piece-form/read-typed.ts';
+import { textOf } from '#core/craft/piece-form/typed-piece.ts';
+import { present } from '#core/craft/reading/present.ts';
+import type { Problem } from '#core/outcome.ts';
+import { amountText } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, NAIL_PITCH, WARPING, WIDTH, type AskedLength } from './asked-of-mine.ts';
+import { isOwnYarn, yarnOf, type TypedMine } from './typed-mine.ts';
+
+export interface MineFound {
+  /** Name of the field it is about; '' for what belongs to no single one. */
+  readonly field: string;
+  readonly says: string;
+}
+
+export type MineJudgement =
+  | { readonly ok: true; readonly mine: MyPiece; readonly fitted: FittedPiece; readonly warnings: readonly MineFound[] }
+  | { readonly ok: false; readonly problems: readonly MineFound[] };
+
+export function judgeMine(typed: TypedMine, pattern: Piece): MineJudgement {
+  const faults = new Map<string, string>();
+  const mine = readMine(typed, pattern, faults);
+  const fitted = fitPiece(pattern, mine, typed.units);
+  if (fitted.ok && faults.size === 0) return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern) };
+  const own = [...faults].map(([field, says]): MineFound => ({ field, says }));
+  const engine = fitted.ok ? [] : placed(fitted.problems, pattern).filter(({ field }) => !faults.has(field));
+  return { ok: false, problems: [...own, ...onePerField(engine)] };
+}
+
+function onePerField(found: readonly MineFound[]): MineFound[] {
+  return [...new Map(found.toReversed().map((one) => [one.field, one])).values()].toReversed();
+}
+
+/** `3 mm` is a length, but no loom. */
+function readLength(typed: TypedMine, asked: AskedLength, faults: Map<string, string>): number | undefined {
+  const text = textOf(typed.texts, asked.key);
+  if (text.trim() === '') return undefined;
+  const read = readText(text, asked, typed.units);
+  if (!read.ok || typeof read.value !== 'number') {
+    faults.set(asked.key, read.ok ? 'Write one length, like 12.5 or 4 7/8.' : read.says);
+    return undefined;
+  }
+  const { least, most, below, above } = asked.plausible;
+  const [leastMm, mostMm] = [least[typed.units], most[typed.units]];
+  if (read.value >= leastMm && read.value <= mostMm) return read.value;
+  faults.set(asked.key, `${read.value < leastMm ? below : above} Between ${limitText(leastMm, asked, typed.units)} and ${limitText(mostMm, asked, typed.units)} works.`);
+  return undefined;
+}
+
+const limitText = (mm: number, { kind }: AskedLength, units: Units): string => amountText(lengthOf(mm, kind === 'fine' ? 'fine' : 'size'), units);
+
+/** What differs from the pattern; a choice that is the pattern's own is none. */
+function readMine(typed: TypedMine, pattern: Piece, faults: Map<string, string>): MyPiece {
+  const length = (asked: AskedLength): number | undefined => readLength(typed, asked, faults);
+  const warping = warpingOf(textOf(typed.texts, WARPING.key));
+  const together = endsOf(textOf(typed.texts, ENDS.key));
+  const loom = present({
+    insideWidthMm: length(INSIDE_WIDTH),
+    insideHeightMm: length(INSIDE_HEIGHT),
+    nailPitchMm: length(NAIL_PITCH),
+    warping: warping === pattern.loom.warping ? undefined : warping,
+  });
+  const yarns = readYarns(typed, pattern, faults);
+  return present({
+    loom: Object.keys(loom).length === 0 ? undefined : loom,
+    widthMm: length(WIDTH),
+    endsTogether: together === (pattern.warp.endsTogether ?? 1) ? undefined : together,
+    yarns: Object.keys(yarns).length === 0 ? undefined : yarns,
+  });
+}
+
+const warpingOf = (text: string): Warping | undefined => (text === 'zigzag' || text === 'two-nail' ? text : undefined);
+const endsOf = (text: string): EndsTogether | undefined => (text === '2' ? 2 : text === '1' ? 1 : undefined);
+
+/** Her own yarns, read as those of any piece are. */
+function readYarns(typed: TypedMine, pattern: Piece, faults: Map<string, string>): NonNullable<MyPiece['yarns']> {
+  const roles = Object.keys(pattern.yarns).filter((role) => isOwnYarn(yarnOf(typed, role)));
+  if (roles.length === 0) return {};
+  const rows = roles.map((role, index) => ({ id: index + 1, texts: { ...yarnOf(typed, role), role } }));
+  const { piece, faults: found } = readTyped({ units: typed.units, texts: {}, warpYarn: {}, yarns: rows, bands: [] });
+  for (const [field, { says }] of found) {
+    const [, at, key] = /^yarns\.(\d+)\.(.+)$/.exec(field) ?? [];
+    const role = at === undefined ? undefined : roles[Number(at)];
+    if (role !== undefined && key !== undefined) faults.set(`yarns.${role}.${key}`, says);
+  }
+  // Whatever was typed goes on as it is: reckoning it tells what is wrong with it.
+  return (piece as { yarns: NonNullable<MyPiece['yarns']> }).yarns;
+}
+
+const FIELD_OF: Readonly<Record<string, string>> = {
+  '/loom/insideWidthMm': INSIDE_WIDTH.key,
+  '/loom/insideHeightMm': INSIDE_HEIGHT.key,
+  '/loom/nailPitchMm': NAIL_PITCH.key,
+  '/loom/warping': WARPING.key,
+  '/size/widthMm': WIDTH.key,
+};
+
+function fieldOf(path: string, pattern: Piece): string {
+  const known = FIELD_OF[path];
+  if (known !== undefined) return known;
+  const [, first, role, key] = path.split('/');
+  if (first === 'warp' && (role === 'endsTogether' || role === 'parity' || role === 'endCount')) return ENDS.key;
+  if (first !== 'yarns' || role === undefined || !Object.hasOwn(pattern.yarns, role)) return '';
+  return `yarns.${role}.${key !== undefined && ['strands', 'wrapsPerInch', 'colour', 'label'].includes(key) ? key : 'grist'}`;
+}
+
+function placed(problems: readonly Problem[], pattern: Piece): MineFound[] {
+  const once = [...new Map(problems.map((problem) => [`${fieldOf(problem.path, pattern)} ${problem.message}`, problem])).values()];
+  return once.map(({ path, message }) => ({ field: fieldOf(path, pattern), says: message }));
+}

@@ -1,0 +1,96 @@
+/**
+ * A student's own making as it stands in the fields of a form: nothing but text, so that a slip is shown again as it
+ * was typed. Fields are called `insideWidthMm`, `endsTogether`, `yarns.<role>.grist` …
+ */
+import type { MyPiece } from '#core/craft/fit.ts';
+import type { Piece, Yarn } from '#core/craft/piece.ts';
+import { gristAsked } from '#core/craft/piece-form/asked-of-yarn.ts';
+import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
+import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
+import { tryOnLoom } from '#core/trial/try-on-loom.ts';
+import type { TypedLoom } from '#core/trial/typed-loom.ts';
+import type { Units } from '#core/units/units.ts';
+import { AS_PATTERN, ENDS, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, WARPING, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+
+export interface TypedMine {
+  /** Those of lengths that name no unit themselves. */
+  readonly units: Units;
+  readonly texts: Texts;
+  /** By role of the pattern, in its order. */
+  readonly yarns: Readonly<Record<string, Texts>>;
+}
+
+export const yarnOf = (typed: TypedMine, role: string): Texts => (Object.hasOwn(typed.yarns, role) ? (typed.yarns[role] ?? {}) : {});
+export const isOwnYarn = (texts: Texts): boolean => !['', AS_PATTERN].includes(textOf(texts, 'by'));
+
+function gristTexts(yarn: Yarn): Texts {
+  if (yarn.count !== undefined) return { by: yarn.count.system, grist: yarn.count.text };
+  const by = yarn.tex === undefined ? 'metresPer100g' : 'tex';
+  return { by, grist: fieldText(yarn.tex ?? yarn.metresPer100g, gristAsked(by), 'cm') };
+}
+
+function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
+  // Until she says otherwise, her yarn is as many strands of the same colour.
+  if (own === undefined) return { by: AS_PATTERN, colour: pattern.colour ?? '', strands: pattern.strands === undefined ? '' : String(pattern.strands) };
+  const traits = Object.fromEntries(YARN_TEXTS.map((asked) => [asked.key, fieldText(Reflect.get(own, asked.key), asked, units)]));
+  return { ...traits, ...gristTexts(own) };
+}
+
+/** What she kept, in the words and units of her form. */
+export function typeMine(mine: MyPiece, pattern: Piece, units: Units): TypedMine {
+  const kept: Readonly<Record<string, unknown>> = { ...mine.loom, widthMm: mine.widthMm };
+  return {
+    units,
+    texts: {
+      ...Object.fromEntries(LENGTHS.map((asked) => [asked.key, fieldText(kept[asked.key], asked, units)])),
+      // What is chosen is always one of two; where she chose nothing it is the pattern's.
+      warping: fieldText(mine.loom?.warping ?? pattern.loom.warping, WARPING, units),
+      endsTogether: fieldText(mine.endsTogether ?? pattern.warp.endsTogether ?? 1, ENDS, units),
+    },
+    yarns: Object.fromEntries(Object.entries(pattern.yarns).map(([role, yarn]) => [role, yarnTexts(mine.yarns?.[role], yarn, units)])),
+  };
+}
+
+const MOST_TYPED = 200;
+
+/** The form as it was sent; what is missing is empty. `ask` gives the text under a name. */
+export function mineOfFields(ask: (name: string) => string | undefined, pattern: Piece): TypedMine {
+  const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
+  const typed: TypedMine = {
+    units: ask('shown') === 'in' ? 'in' : 'cm',
+    texts: Object.fromEntries([...LENGTHS, WARPING, ENDS].map(({ key }) => [key, text(key)])),
+    yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, Object.fromEntries(YARN_KEYS.map((key) => [key, text(`yarns.${role}.${key}`)]))])),
+  };
+  // Without script she chooses other units and sends the form in one go; what she typed belongs to what she saw.
+  return inOtherUnits(typed, ask('units') === 'in' ? 'in' : 'cm');
+}
+
+/** The same lengths typed in other units; what cannot be read stays as it was typed. */
+export function inOtherUnits(typed: TypedMine, units: Units): TypedMine {
+  if (typed.units === units) return typed;
+  const texts = Object.fromEntries(LENGTHS.map((asked) => {
+    const text = textOf(typed.texts, asked.key);
+    const read = text.trim() === '' ? null : readText(text, asked, typed.units);
+    return [asked.key, read?.ok === true ? fieldText(read.value, asked, units) : text];
+  }));
+  return { ...typed, units, texts: { ...typed.texts, ...texts } };
+}
+
+/** With the loom she tried the pattern on before she had a seat. */
+export function withTriedLoom(typed: TypedMine, loom: TypedLoom, pattern: Piece): TypedMine {
+  const tried = tryOnLoom(pattern, '', loom);
+  const narrower = loom.narrower && tried.ok && tried.fits ? tried.mine.widthMm : undefined;
+  const texts = {
+    ...typed.texts,
+    [INSIDE_WIDTH.key]: loom.inside,
+    [NAIL_PITCH.key]: loom.spacing,
+    [ENDS.key]: String(loom.ends),
+    ...(narrower === undefined ? {} : { [WIDTH.key]: fieldText(narrower, WIDTH, loom.units) }),
+  };
+  return { ...inOtherUnits(typed, loom.units), texts: { ...inOtherUnits(typed, loom.units).texts, ...texts } };
+}
+
+/** Everything as the pattern has it. */
+export function asPattern(typed: TypedMine, pattern: Piece): TypedMine {
+  return typeMine({}, pattern, typed.units);
+}

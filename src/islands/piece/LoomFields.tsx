@@ -1,0 +1,70 @@
+import type { Dispatch } from 'react';
+import { lengthOf } from '#core/craft/amounts/amount-types.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, NAIL_PITCH, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
+import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import { fieldText, fieldUnit } from '#core/craft/piece-form/field-text.ts';
+import { textOf } from '#core/craft/piece-form/typed-piece.ts';
+import { amountText } from '#core/units/format-amount.ts';
+import { widestOnLoom } from '#core/craft/my-piece/widest-on-loom.ts';
+import { Choose } from '#islands/ui/Choose.tsx';
+import { UnitField } from '#islands/ui/Field.tsx';
+import type { MineEvent } from './mine-after.ts';
+
+interface LoomFieldsProps {
+  typed: TypedMine;
+  pattern: Piece;
+  faults: Readonly<Record<string, string>>;
+  judged: MineJudgement;
+  change: Dispatch<MineEvent>;
+}
+
+const UNITS = [{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }] as const;
+
+/** Loom, width and ends. What stays empty is as in the pattern, which stands in the hint. */
+export function LoomFields({ typed, pattern, faults, judged, change }: LoomFieldsProps) {
+  const { units } = typed;
+  const { insideWidthMm, insideHeightMm, nailPitchMm } = pattern.loom;
+  const ofPattern: Readonly<Record<string, number | undefined>> = { insideWidthMm, insideHeightMm, nailPitchMm, widthMm: pattern.size.widthMm };
+  const lengthField = (asked: AskedLength) => {
+    const mm = ofPattern[asked.key];
+    const usual = mm === undefined ? '' : `The pattern: ${amountText(lengthOf(mm, asked.kind === 'fine' ? 'fine' : 'size'), units)}.`;
+    return (
+      <UnitField
+        name={asked.key}
+        label={asked.label}
+        hint={[asked.hint, usual].filter(Boolean).join(' ')}
+        unit={fieldUnit(asked, units) ?? ''}
+        value={textOf(typed.texts, asked.key)}
+        error={faults[asked.key]}
+        maxLength={40}
+        onChange={(event) => change({ kind: 'type', key: asked.key, text: event.currentTarget.value })}
+      />
+    );
+  };
+  const choice = (asked: typeof WARPING) => asked.kind === 'choice' ? asked.options.map(({ text, label }) => ({ value: text, label })) : [];
+  const widest = judged.ok || faults[INSIDE_WIDTH.key] === undefined ? null : widestOnLoom(typed, pattern);
+  return (
+    <fieldset className="stack">
+      <legend className="h3">Your loom</legend>
+      <Choose name="units" legend="Units" value={units} options={UNITS} onChoose={(other) => change({ kind: 'units', units: other })} />
+      <input type="hidden" name="shown" value={units} />
+      <div className="two folds">
+        {lengthField(INSIDE_WIDTH)}
+        {lengthField(INSIDE_HEIGHT)}
+        {lengthField(NAIL_PITCH)}
+        {lengthField(WIDTH)}
+      </div>
+      {widest !== null && (
+        <p className="small">
+          With this loom it can be {amountText(lengthOf(widest, 'size'), units)} wide.{' '}
+          <button type="button" className="as-link" onClick={() => change({ kind: 'type', key: WIDTH.key, text: fieldText(widest, WIDTH, units) })}>Make it so</button>
+        </p>
+      )}
+      <Choose name={ENDS.key} legend={ENDS.label} hint="Doubled: two ends are worked as one, on a loom whose nails stand close." value={textOf(typed.texts, ENDS.key)} options={choice(ENDS)} error={faults[ENDS.key]} onChoose={(text) => change({ kind: 'type', key: ENDS.key, text })} />
+      <Choose name={WARPING.key} legend={WARPING.label} value={textOf(typed.texts, WARPING.key)} options={choice(WARPING)} error={faults[WARPING.key]} onChoose={(text) => change({ kind: 'type', key: WARPING.key, text })} />
+    </fieldset>
+  );
+}
+

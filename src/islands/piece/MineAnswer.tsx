@@ -1,0 +1,99 @@
+import { useMemo } from 'react';
+import { amountOf, type Amount } from '#core/craft/amounts.ts';
+import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
+import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { seriesFigures } from '#core/series/figures.ts';
+import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
+import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
+import type { Units } from '#core/units/units.ts';
+import { Cloth } from '#islands/cloth/Cloth.tsx';
+import { atOneScale, type Made } from '#islands/series/trial.ts';
+import { Figures, type Figure } from '#islands/ui/Figures.tsx';
+import { Flag } from '#islands/ui/Flag.tsx';
+import { Parts } from '#islands/ui/Parts.tsx';
+
+interface MineAnswerProps {
+  name: string;
+  teacher: string;
+  pattern: Made;
+  judged: MineJudgement;
+  units: Units;
+}
+
+/** Both drawings without the gap between them. */
+const ROOM_PX = 420;
+
+/** Her piece beside the pattern, in a picture, in figures and in words. */
+export function MineAnswer({ name, teacher, pattern, judged, units }: MineAnswerProps) {
+  const made = judged.ok ? judged.fitted : null;
+  return (
+    <div className="mine-answer stack">
+      <div role="status">
+        {judged.ok ? <Flag kind="on">It fits your loom</Flag> : <Flag kind="mend">{judged.problems.length === 1 ? 'One thing does not work yet' : `${judged.problems.length} things do not work yet`}</Flag>}
+      </div>
+      <Looms {...{ name, teacher, pattern, made, units }} />
+      {made !== null && <Figures items={figuresOf(made, pattern, units)} />}
+      {judged.ok
+        ? <Words says={[...judged.warnings.map(({ says }) => says), ...judged.fitted.changes]} />
+        : <ul className="small mine-words">{judged.problems.map(({ field, says }) => <li key={`${field} ${says}`}>{says}</li>)}</ul>}
+      {made !== null && <Reckoned made={made} units={units} />}
+    </div>
+  );
+}
+
+function Words({ says }: { says: readonly string[] }) {
+  return says.length === 0 ? null : <ul className="small mine-words">{says.map((sentence) => <li key={sentence}>{sentence}</li>)}</ul>;
+}
+
+function Looms({ name, teacher, pattern, made, units }: { name: string; teacher: string; pattern: Made; made: Made | null; units: Units }) {
+  const cloths = useMemo(() => ({ pattern: clothPieceOf(pattern.piece, pattern.plan, name), mine: made === null ? null : clothPieceOf(made.piece, made.plan, name) }), [pattern, made, name]);
+  const inside = cloths.mine?.loom?.insideWidthMm ?? cloths.pattern.loom?.insideWidthMm ?? cloths.pattern.widthMm;
+  const { patternPx, loomPx } = atOneScale(cloths.pattern.widthMm, inside, ROOM_PX);
+  const patternView = useMemo(() => ({ id: 'mine-pattern', as: 'hanging', width: patternPx, decorative: true } as const), [patternPx]);
+  const mineView = useMemo(() => ({ id: 'mine-own', as: 'loom', width: loomPx, units } as const), [loomPx, units]);
+  return (
+    <div className="trial-looms">
+      <figure className="cloth"><Cloth piece={cloths.pattern} view={patternView} /><figcaption><b>{teacher}’s</b><br />{amountText(lengthOf(pattern.piece.size.widthMm, 'size'), units)} wide</figcaption></figure>
+      {cloths.mine !== null && made !== null && <figure className="cloth"><Cloth piece={cloths.mine} view={mineView} /><figcaption><b>Yours</b><br />{amountText(lengthOf(made.piece.size.widthMm, 'size'), units)} wide, drawn at the same scale</figcaption></figure>}
+    </div>
+  );
+}
+
+function figuresOf(made: Made, pattern: Made, units: Units): Figure[] {
+  const [mine, theirs] = [seriesFigures(made.piece, made.plan), seriesFigures(pattern.piece, pattern.plan)];
+  const text = (parts: readonly AmountPart[]): string => parts.map((part) => part.text).join('');
+  const figure = (label: string, now: readonly AmountPart[], then: readonly AmountPart[]): Figure => ({ label, value: now, was: text(now) === text(then) ? undefined : `pattern ${text(then)}` });
+  const both = (label: string, of: (figures: typeof mine) => readonly AmountPart[]): Figure => figure(label, of(mine), of(theirs));
+  const hours = both('At the loom', (figures) => likelyHours(figures.hours));
+  return [
+    { ...both('Ends', (figures) => formatAmount(countOf(figures.ends, 'end', 'ends'), units)), value: String(mine.ends), unit: mine.endsTogether === 2 ? 'in pairs' : undefined },
+    both('Warp', (figures) => formatAmount(lengthOf(figures.warpMm, 'yarn'), units)),
+    both('Weft yarn', (figures) => formatAmount(massOf(figures.weftGrams), units)),
+    { ...hours, was: [hoursRange(mine.hours), hours.was].filter(Boolean).join(', ') },
+  ];
+}
+
+const KEYS = ['ends', 'nails', 'spacing', 'wound-width', 'loom.width', 'loom.height', 'warp', 'pick', 'spacer.width', 'spacer.height', 'dowel.length', 'hours'];
+
+/** The numbers with the way each was got. */
+function Reckoned({ made, units }: { made: Made; units: Units }) {
+  const keys = [...KEYS, ...Object.keys(made.piece.yarns).map((role) => `yarn.${role}`)];
+  const amounts = keys.flatMap((key): Amount[] => {
+    const amount = amountOf(key, made.piece, made.plan);
+    return amount.ok ? [amount.value] : [];
+  });
+  return (
+    <details className="mine-reckoned">
+      <summary>How this was reckoned</summary>
+      <dl className="lined">
+        {amounts.map((amount) => (
+          <div key={amount.key}>
+            <dt>{amount.label}<span className="small quiet">{amount.howReckoned.formula}{amount.howReckoned.inputs.length > 0 && `: ${amount.howReckoned.inputs.map(({ name, value }) => `${name} ${amountText(value, units)}`).join(', ')}`}. By {amount.howReckoned.source}.</span></dt>
+            <dd className="num"><Parts parts={formatAmount(amount, units)} /></dd>
+          </div>
+        ))}
+      </dl>
+    </details>
+  );
+}

@@ -1,0 +1,55 @@
+/**
+ * A student's own making beside the pattern: loom, width, ends and yarns, reckoned and drawn as she types. Without script
+ * it is a form; the answer is the same, because the same core gives it.
+ */
+import { useDeferredValue, useEffect, useMemo, useReducer, useState } from 'react';
+import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
+import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import { planPiece } from '#core/craft/plan.ts';
+import { Button } from '#islands/ui/Button.tsx';
+import { LoomFields } from './LoomFields.tsx';
+import { mineAfter } from './mine-after.ts';
+import { MineAnswer } from './MineAnswer.tsx';
+import { YarnFields } from './YarnFields.tsx';
+
+export interface MyPieceProps {
+  readonly slug: string;
+  /** How the piece is spoken of: "Low Tide". */
+  readonly name: string;
+  /** First name of the teacher. */
+  readonly teacher: string;
+  readonly pattern: Piece;
+  readonly typed: TypedMine;
+  /** Counts what was kept; sent back, so that two windows do not undo each other. */
+  readonly revision: number;
+  /** What the server said of the form as it was sent, by field. */
+  readonly errors: Readonly<Record<string, string>>;
+  readonly action: string;
+}
+
+export function MyPiece({ slug, name, teacher, pattern, typed: before, revision, errors, action }: MyPieceProps) {
+  const [typed, change] = useReducer(mineAfter, before);
+  const [alive, setAlive] = useState(false);
+  useEffect(() => setAlive(true), []);
+  const settled = useDeferredValue(typed);
+  const judged = useMemo(() => judgeMine(settled, pattern), [settled, pattern]);
+  const planned = useMemo(() => planPiece(pattern, settled.units), [pattern, settled.units]);
+  const now = judged.ok ? {} : Object.fromEntries(judged.problems.map(({ field, says }) => [field, says]));
+  const faults = alive ? now : errors;
+  return (
+    <div className="my-piece">
+      <form method="post" action={action} className="stack stack-wide" aria-label="My piece" noValidate>
+        <input type="hidden" name="series" value={slug} />
+        <input type="hidden" name="revision" value={revision} />
+        <LoomFields {...{ typed, pattern, faults, change, judged }} />
+        <YarnFields {...{ typed, pattern, faults, change, alive }} fitted={judged.ok ? judged.fitted : null} />
+        <div className="row">
+          <Button type="submit" kind="act">Keep my piece</Button>
+          <Button type="submit" kind="quiet" name="asPattern" value="yes">All as in the pattern</Button>
+        </div>
+      </form>
+      {planned.ok && <MineAnswer {...{ name, teacher, judged }} pattern={{ piece: pattern, plan: planned.value }} units={settled.units} />}
+    </div>
+  );
+}

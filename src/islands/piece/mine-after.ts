@@ -1,0 +1,23 @@
+// What can be done to the typed form, apart from any screen.
+import type { Piece } from '#core/craft/piece.ts';
+import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
+import type { Units } from '#core/units/units.ts';
+
+export type MineEvent =
+  | { readonly kind: 'type'; readonly key: string; readonly text: string }
+  | { readonly kind: 'type-yarn'; readonly role: string; readonly key: string; readonly text: string }
+  | { readonly kind: 'units'; readonly units: Units }
+  | { readonly kind: 'as-pattern'; readonly pattern: Piece };
+
+export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
+  switch (event.kind) {
+    case 'type':
+      return { ...typed, texts: { ...typed.texts, [event.key]: event.text } };
+    case 'type-yarn':
+      return { ...typed, yarns: { ...typed.yarns, [event.role]: { ...yarnOf(typed, event.role), [event.key]: event.text } } };
+    case 'units':
+      return inOtherUnits(typed, event.units);
+    case 'as-pattern':
+      return asPattern(typed, event.pattern);
+  }
+}
