@@ -4,6 +4,7 @@ import { checkout } from './checkout.ts';
 import { following } from './following.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
+import { pieces } from './pieces.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, office, people, workroom };
+export const server = { bench, checkout, following, office, people, pieces, workroom };

@@ -11,6 +11,8 @@ export interface Actor {
   readonly isSteward: boolean;
   /** The workroom this person teaches in, or null. */
   readonly workroomId: number | null;
+  /** Name of the workroom this person works in: her own, else the only one she helps in; null where that tells nothing. */
+  readonly workroomName: string | null;
   /** Workrooms this person helps in. */
   readonly helpsInWorkroomIds: readonly number[];
   readonly units: 'cm' | 'in';

@@ -30,6 +30,7 @@ export async function actorOf(user: User): Promise<Actor> {
     addressConfirmed: user.emailConfirmedAt !== null,
     isSteward: user.isSteward,
     workroomId: workroom?.id ?? null,
+    workroomName: workroom?.name ?? null,
     helpsInWorkroomIds: helps.map(({ workroomId }) => workroomId),
     units: user.units,
     timeZone: user.timeZone,

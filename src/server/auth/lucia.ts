@@ -22,6 +22,7 @@ export interface UserAttributes {
   readonly addressConfirmed: boolean;
   readonly isSteward: boolean;
   readonly workroomId: number | null;
+  readonly workroomName: string | null;
   readonly helpsInWorkroomIds: readonly number[];
   readonly units: 'cm' | 'in';
   readonly timeZone: string;
@@ -40,7 +41,7 @@ declare module 'lucia' {
 interface SessionAndUserRow {
   id: string; userId: number; expiresAt: Date; endsAt: Date; idleSeconds: number; provedAt: Date; device: string;
   publicId: string; name: string; email: string; confirmedAt: Date | null; isSteward: number; units: 'cm' | 'in'; timeZone: string;
-  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; helps: string | null;
+  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; workroomName: string | null; helps: string | null;
 }
 
 /** One statement a request: session, person and the roles that follow from other rows. A suspended person has no session. */
@@ -48,6 +49,7 @@ const SESSION_AND_USER = `
   SELECT s.id, s.user_id AS userId, s.expires_at AS expiresAt, s.ends_at AS endsAt, s.idle_seconds AS idleSeconds, s.proved_at AS provedAt, s.device,
          u.public_id AS publicId, u.name, u.email, u.email_confirmed_at AS confirmedAt, u.is_steward AS isSteward, u.units, u.time_zone AS timeZone, u.scheme,
          w.id AS workroomId,
+         COALESCE(w.name, (SELECT MIN(o.name) FROM workroom_helpers h JOIN workrooms o ON o.id = h.workroom_id WHERE h.user_id = u.id HAVING COUNT(*) = 1)) AS workroomName,
          (SELECT GROUP_CONCAT(h.workroom_id) FROM workroom_helpers h WHERE h.user_id = u.id) AS helps
     FROM sessions s
     JOIN users u ON u.id = s.user_id AND u.suspended_at IS NULL
@@ -69,6 +71,7 @@ function userOf(row: SessionAndUserRow): DatabaseUser {
       addressConfirmed: row.confirmedAt !== null,
       isSteward: row.isSteward === 1,
       workroomId: row.workroomId,
+      workroomName: row.workroomName,
       helpsInWorkroomIds: row.helps === null ? [] : row.helps.split(',').map(Number),
       units: row.units,
       timeZone: row.timeZone,

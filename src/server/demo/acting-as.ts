@@ -21,6 +21,7 @@ export async function actingAs(user: User): Promise<Context & { actor: Actor }> 
       addressConfirmed: true,
       isSteward: user.isSteward,
       workroomId: workroom?.id ?? null,
+      workroomName: workroom?.name ?? null,
       helpsInWorkroomIds: helps.map(({ workroomId }) => workroomId),
       units: user.units,
       timeZone: user.timeZone,

@@ -14,5 +14,6 @@ export function presentSitePerson(actor: Actor): SitePerson {
     scheme: actor.scheme === 'system' ? null : actor.scheme,
     units: actor.units,
     addressConfirmed: actor.addressConfirmed,
+    workroom: actor.workroomName,
   };
 }

@@ -60,6 +60,11 @@ export async function answerForm<T>(schema: z.ZodType<T, z.ZodTypeDef, unknown>,
   }
 }
 
+/** The answer for a button that saves nothing: the page is drawn again with everything that stood in the form. */
+export function drawnAgain(form: FormData): FormAnswer {
+  return { ok: false, status: 200, summary: '', fields: {}, values: typedValues(form) };
+}
+
 const FORM_CODES: ReadonlySet<string> = new Set(['VALIDATION', 'CONFLICT', 'GONE', 'RATE_LIMITED', 'UPSTREAM', 'UNAVAILABLE', 'TOO_LARGE', 'PAYMENT_REQUIRED']);
 
 export interface FormState {

@@ -57,4 +57,5 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/bench': 'bench',
   '/workroom/series/new': 'teacher',
   '/workroom/series/[slug]': 'teacher',
+  '/workroom/series/[slug]/piece': 'teacher',
 };

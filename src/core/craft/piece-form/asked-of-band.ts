@@ -88,20 +88,22 @@ export const JOIN: Asked = {
 };
 /** Without a choice, steps are alike unless the shape leans; so an untouched field must not send one. */
 export const SYMMETRIC: Asked = {
-  key: 'symmetric', kind: 'choice', label: 'Steps alike on both sides',
+  key: 'symmetric', kind: 'choice', label: 'Both sides alike',
   options: [{ text: '', value: '', label: 'Unless it leans' }, { text: 'yes', value: true, label: 'Yes' }, { text: 'no', value: false, label: 'No' }],
 };
 
 const PLACING: readonly Asked[] = [
-  { key: 'centreMm', kind: 'length', label: 'Its middle', called: 'Middle of the shape', hint: 'From the left selvedge.', otherwise: 'the middle' },
-  { key: 'bottomMm', kind: 'length', label: 'Its foot', called: 'Foot of the shape', hint: 'From the band’s first row.', otherwise: 'the first row' },
+  { key: 'centreMm', kind: 'length', label: 'Middle at', called: 'Middle of the shape', otherwise: 'middle' },
+  { key: 'bottomMm', kind: 'length', label: 'Foot at', called: 'Foot of the shape', otherwise: '0' },
 ];
-const LEAN: Asked = { key: 'leanMm', kind: 'lean', label: 'Lean', hint: 'How far the top stands to the right; −2 is to the left.', otherwise: 'upright' };
+const LEAN: Asked = { key: 'leanMm', kind: 'lean', label: 'Lean', otherwise: '0' };
 const UPRIGHT: readonly Asked[] = [
   { key: 'baseMm', kind: 'length', label: 'Base', called: 'Base of the shape', needed: true },
   { key: 'heightMm', kind: 'length', label: 'Height', called: 'Height of the shape', needed: true },
 ];
 const ROUND: readonly Asked[] = [{ key: 'radiusMm', kind: 'length', label: 'Radius', called: 'Radius of the circle', needed: true }];
+
+export const SHAPE_HINT = 'Its middle counts from the left selvedge, its foot from the band’s first row. A lean of 2 puts the top to the right, of −2 to the left.';
 
 /** Measures and place of a shape of this kind. */
 export const shapeFields = (kind: string): readonly Asked[] => [yarn, ...(kind === 'circle' ? ROUND : UPRIGHT), ...PLACING, LEAN, SYMMETRIC, JOIN];

@@ -1,8 +1,9 @@
 /** What is asked of a yarn. */
+import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import type { CountSystem } from '#core/craft/piece.ts';
 import { option, type Asked } from './asked.ts';
 
-export const ROLE: Asked = { key: 'role', kind: 'text', label: 'Role', called: 'The role', maxLength: 40, needed: true, hint: 'What it does in the piece: ground, accent, fringe.' };
+export const ROLE: Asked = { key: 'role', kind: 'text', label: 'Role', called: 'The role', maxLength: 40, needed: true };
 
 export const LABEL: Asked = { key: 'label', kind: 'text', label: 'Name on the label', maxLength: 120 };
 export const COLOUR: Asked = { key: 'colour', kind: 'text', label: 'Colour', maxLength: 7, otherwise: 'undyed' };
@@ -47,7 +48,9 @@ export const BALL: readonly Asked[] = [
   { key: 'ball.grams', kind: 'number', label: 'It weighs', called: 'Grams of a ball', unit: 'g' },
 ];
 export const FIBRE: Asked = { key: 'fibre', kind: 'text', label: 'Fibre', maxLength: 60 };
-export const ASHENHURST: Asked = { key: 'ashenhurstK', kind: 'number', label: 'Ashenhurst’s K', otherwise: '0.84 as weft, 0.90 as warp' };
+export const ASHENHURST: Asked = { key: 'ashenhurstK', kind: 'number', label: 'Ashenhurst’s K' };
+/** The same with what is usual for warp or weft. */
+export const ashenhurstOf = (use: keyof typeof ASHENHURST_K): Asked => ({ ...ASHENHURST, standard: () => ASHENHURST_K[use] });
 
 /** What is written into the piece as it stands; role and grist have rules of their own. */
 export const YARN_TRAITS: readonly Asked[] = [LABEL, COLOUR, STRANDS, ASHENHURST, WRAPS, ...BALL, FIBRE];

@@ -105,6 +105,24 @@ function addYarn(yarns: readonly TypedRow[]): readonly TypedRow[] {
   return [...yarns, { id: nextId(yarns), texts: { role: '', by, colour: DYES[(yarns.length + DYES.length - 1) % DYES.length] ?? DYES[0] } }];
 }
 
+/** Place of the band that hands go on with after the act; null where it is about none. */
+export function bandInHand(act: Act): number | null {
+  switch (act.do) {
+    case 'add-band':
+      return act.after + 1;
+    case 'copy-band':
+    case 'later':
+      return act.band + 1;
+    case 'sooner':
+      return Math.max(0, act.band - 1);
+    case 'add-shape':
+    case 'take-out-shape':
+      return act.band;
+    default:
+      return null;
+  }
+}
+
 /** The form after the act; one that names a row that is not there changes nothing. */
 export function changeTyped(typed: TypedPiece, act: Act): TypedPiece {
   const { bands, yarns } = typed;

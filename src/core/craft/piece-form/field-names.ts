@@ -26,10 +26,10 @@ function textsOf(ask: Ask, keys: readonly string[], prefix: string): Texts {
   }));
 }
 
-/** Fields that were not in the form yet, since the technique was only now chosen, begin with what is usual. */
+/** Fields that were not in the form yet, since the technique was only now chosen, begin with what is usual, a further yarn with the band’s own. */
 export function withStarters(texts: Texts, asked: readonly Asked[], units: Units): Texts {
-  const started = asked.filter(({ key, starter }) => starter !== undefined && !Object.hasOwn(texts, key));
-  return { ...Object.fromEntries(started.map((one) => [one.key, fieldText(one.starter, one, units)])), ...texts };
+  const started = asked.filter(({ key, kind, starter }) => (starter !== undefined || kind === 'role') && !Object.hasOwn(texts, key));
+  return { ...Object.fromEntries(started.map((one) => [one.key, one.kind === 'role' ? textOf(texts, 'yarn') : fieldText(one.starter, one, units)])), ...texts };
 }
 
 function bandOf(ask: Ask, index: number, units: Units): TypedBand {

@@ -6,9 +6,12 @@ import { fieldOfPlace } from './field-names.ts';
 import { readTyped, type Fault } from './read-typed.ts';
 import { textOf, type TypedPiece } from './typed-piece.ts';
 
-export interface Found extends Fault {
+export interface Found {
   /** Name of the field it is about; `bands`, `yarns` or '' for what belongs to no single one. */
   readonly field: string;
+  readonly says: string;
+  /** `reckoned`: the engine found it in what could be read. */
+  readonly kind: Fault['kind'] | 'reckoned';
 }
 
 export type Judgement =
@@ -32,7 +35,7 @@ export function judgeTyped(typed: TypedPiece): Judgement {
 }
 
 function placed(problems: readonly Problem[], typed: TypedPiece): Found[] {
-  return problems.map(({ path, message }) => ({ field: fieldOfPlace(path, typed), says: message, isMissing: false }));
+  return problems.map(({ path, message }) => ({ field: fieldOfPlace(path, typed), says: message, kind: 'reckoned' }));
 }
 
 function onePerField(found: readonly Found[]): Found[] {

@@ -12,8 +12,8 @@ import { textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } fr
 /** What cannot be read of a field, by the name of the field (`field-names.ts`). */
 export interface Fault {
   readonly says: string;
-  /** Nothing was typed where something must stand. */
-  readonly isMissing: boolean;
+  /** Nothing was typed where something must stand; or something that cannot be read. */
+  readonly kind: 'missing' | 'unreadable';
 }
 
 export interface ReadTyped {
@@ -30,15 +30,15 @@ class Reading {
 
   constructor(readonly units: Units) {}
 
-  slip(field: string, says: string, isMissing = false): void {
-    if (!this.faults.has(field)) this.faults.set(field, { says, isMissing });
+  slip(field: string, says: string, kind: Fault['kind'] = 'unreadable'): void {
+    if (!this.faults.has(field)) this.faults.set(field, { says, kind });
   }
 
   value(texts: Texts, asked: Asked, prefix: string): string | number | boolean | undefined {
     const text = textOf(texts, asked.key);
     const field = `${prefix}${asked.key}`;
     if (text.trim() === '') {
-      if (asked.needed === true) this.slip(field, missingSays(asked, this.units), true);
+      if (asked.needed === true) this.slip(field, missingSays(asked, this.units), 'missing');
       return undefined;
     }
     const read = readText(text, asked, this.units);
@@ -122,7 +122,7 @@ function withRoles(reading: Reading, group: Group, asked: readonly Asked[], role
   for (const one of asked) {
     if (one.kind !== 'role' || group[one.key] === undefined) continue;
     const role = roleOf.get(String(group[one.key]));
-    if (role === undefined) reading.slip(`${prefix}${one.key}`, missingSays(one, reading.units), true);
+    if (role === undefined) reading.slip(`${prefix}${one.key}`, missingSays(one, reading.units), 'missing');
     group[one.key] = role;
   }
   return group;
@@ -140,7 +140,7 @@ function readBand(reading: Reading, { texts, shapes }: TypedBand, prefix: string
   const band = withRoles(reading, reading.fill({}, texts, asked, prefix), asked, roleOf, prefix);
   if (fills) band[FILL_KEY] = true;
   if (technique === 'loop-pile' && band['rodMm'] === undefined && band['loopMm'] === undefined) {
-    reading.slip(`${prefix}rodMm`, 'Say how thick the rod is, or how high loops are drawn by hand.', true);
+    reading.slip(`${prefix}rodMm`, 'Say how thick the rod is, or how high loops are drawn by hand.', 'missing');
   }
   if (technique === 'tabby' && shapes.length > 0) {
     band['shapes'] = shapes.map((shape, index) => readShape(reading, shape.texts, `${prefix}shapes.${String(index)}.`, roleOf));

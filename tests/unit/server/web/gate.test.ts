@@ -5,7 +5,7 @@ import { gate, safeReturn, type GateAnswer } from '#server/web/gate.ts';
 import type { RouteRule } from '#server/web/route-rules.ts';
 
 const student: Actor = {
-  userId: 1, publicId: 'p', name: 'Maud', email: 'maud@weavers.example', addressConfirmed: true, isSteward: false, workroomId: null, helpsInWorkroomIds: [],
+  userId: 1, publicId: 'p', name: 'Maud', email: 'maud@weavers.example', addressConfirmed: true, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [],
   units: 'cm', timeZone: 'UTC', scheme: 'system', sessionId: 's', provedAt: new Date(0),
 };
 const PEOPLE = {

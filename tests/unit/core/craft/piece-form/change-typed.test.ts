@@ -56,7 +56,7 @@ describe('rows of the form', () => {
 
   test('another technique begins with what is usual, and the old one’s words come back with it', () => {
     const soumak = typeIn(form, 'bands.0.technique', 'soumak');
-    expect(soumak.bands[0]?.texts).toMatchObject({ over: '4', back: '2', rows: '4', tabbyBetween: '2' });
+    expect(soumak.bands[0]?.texts).toMatchObject({ over: '4', back: '2', rows: '4', tabbyBetween: '2', tabbyYarn: '1' });
     expect(typeIn(soumak, 'bands.0.technique', 'tabby').bands[0]?.texts).toMatchObject({ heightMm: '3', name: 'foot' });
   });
 });

@@ -25,13 +25,13 @@ describe('a piece in a form', () => {
       const { piece: read, faults } = readTyped(typePiece(piece, units));
       expect([...faults]).toEqual([]);
       expect(read).toEqual(piece);
-    }), { numRuns: 300 });
+    }), { numRuns: 120 });
   });
 
   test.each(['cm', 'in'] as const)('comes back the same after a browser has sent it, in %s', (units) => {
     fc.assert(fc.property(arbitraryPiece, (piece) => {
       expect(readTyped(sent(piece, units)).piece).toEqual(piece);
-    }), { numRuns: 150 });
+    }), { numRuns: 60 });
   });
 
   test.each(SHIPPED.flatMap((path) => [[path, 'cm'], [path, 'in']] as const))('keeps the plan of %s in %s', (path, units) => {

@@ -1,0 +1,33 @@
+import { defineAction } from 'astro:actions';
+import { PieceForm } from '#contracts/piece.ts';
+import { readAct } from '#core/craft/piece-form/change-typed.ts';
+import { typedOfFields } from '#core/craft/piece-form/field-names.ts';
+import { judgeTyped, type Found } from '#core/craft/piece-form/judge-typed.ts';
+import { AppError } from '#server/errors.ts';
+import { savePiece } from '#server/use-cases/workroom/save-piece.ts';
+import { answerForm, drawnAgain, type FormAnswer } from '#server/web/form.ts';
+
+export const pieces = {
+  /**
+   * Every button of the form comes here. One that only moves rows saves nothing: the page draws the form again as it
+   * was sent, after that act.
+   */
+  describe: defineAction({
+    accept: 'form',
+    handler: async (form: FormData, api): Promise<FormAnswer> => {
+      const wanted = form.get('do');
+      if (typeof wanted === 'string' && readAct(wanted) !== null) return drawnAgain(form);
+      return answerForm(PieceForm, form, async ({ series, revision, ...fields }) => {
+        const judged = judgeTyped(typedOfFields((name) => { const text = fields[name]; return typeof text === 'string' ? text : text?.[0]; }));
+        if (!judged.ok) throw refused(judged.problems);
+        const saved = await savePiece(api.locals.ctx, { series, revision, piece: judged.piece });
+        if (!saved.ok) throw refused(saved.problems.map(({ message }) => ({ field: '', says: message, kind: 'reckoned' as const })));
+        return { to: `/workroom/series/${series}/piece`, said: 'The piece is saved.' };
+      });
+    },
+  }),
+};
+
+function refused(problems: readonly Found[]): AppError {
+  return new AppError('VALIDATION', { fields: Object.fromEntries(problems.toReversed().map(({ field, says }) => [field, says])) });
+}

@@ -1,0 +1,66 @@
+import { useState } from 'react';
+import { textOf } from '#core/craft/piece-form/typed-piece.ts';
+import { Glyph } from '#islands/ui/Glyph.tsx';
+import { Wrong } from '#islands/ui/Wrong.tsx';
+import { ActButton } from './ActButton.tsx';
+import type { BandWords } from './band-words.ts';
+import { BandRow } from './BandRow.tsx';
+import { useHands } from './hands.ts';
+import { YarnRow } from './YarnRow.tsx';
+
+/** The yarns of the weft, each with what it does in the piece. */
+export function YarnList({ fresh }: { readonly fresh: string | null }) {
+  const { typed, wrong } = useHands();
+  const used = new Set(typed.bands.flatMap(({ texts, shapes }) => [texts['yarn'], texts['tabbyYarn'], ...shapes.map((shape) => shape.texts['yarn'])]));
+  return (
+    <section aria-labelledby="yarns-title" id="yarns">
+      <h2 className="h3" id="yarns-title">Yarns</h2>
+      <p className="small quiet">A role says what a yarn does in the piece: ground, accent, fringe.</p>
+      <div className="lined-rows">
+        {typed.yarns.map(({ id, texts }, index) => (
+          <YarnRow key={id} texts={texts} prefix={`yarns.${String(index)}.`} row={{ index, id, isUsed: used.has(String(id)) }} isOpen={textOf(texts, 'grist') === '' || fresh === `yarns.${String(index)}.role`} />
+        ))}
+      </div>
+      {wrong.has('yarns') && <Wrong id="f-yarns" says={wrong.get('yarns') ?? ''} />}
+      <p className="mt-3"><ActButton act={{ do: 'add-yarn' }} to={`yarn-${String(typed.yarns.length)}`} className="btn btn-sm"><Glyph name="plus" />Add a yarn</ActButton></p>
+    </section>
+  );
+}
+
+interface BandListProps {
+  /** By id of the band, as it was when the piece could be woven last. */
+  readonly words: ReadonlyMap<number, BandWords>;
+  readonly chosen: number | null;
+  readonly onChoose: (id: number) => void;
+  /** Band to be open from the beginning. */
+  readonly open: number | null;
+  readonly fresh: string | null;
+}
+
+/** The bands, running as the picture beside them does: what was woven first lies where the picture has it. */
+export function BandList({ words, chosen, onChoose, open, fresh }: BandListProps) {
+  const { typed, wrong } = useHands();
+  const laterIsUp = textOf(typed.texts, 'hangs') !== 'turned';
+  const count = typed.bands.length;
+  const rows = typed.bands.map((band, index) => (
+    <BandRow
+      key={band.id} band={band} index={index} count={count} laterIsUp={laterIsUp} words={words.get(band.id) ?? null}
+      isChosen={chosen === band.id} isOpen={open === index || count === 1 || fresh === `bands.${String(index)}.technique`} onChoose={onChoose}
+    />
+  ));
+  const add = <p className="band-add"><ActButton act={{ do: 'add-band', after: count - 1 }} to={`band-${String(count)}`} className="btn"><Glyph name="plus" />{count === 0 ? 'Add a band' : 'Add a band, woven last'}</ActButton></p>;
+  return (
+    <section aria-labelledby="bands-title" id="bands">
+      <h2 className="h3" id="bands-title">{laterIsUp ? 'Bands, woven from the foot up' : 'Bands, first woven on top'}</h2>
+      {wrong.has('bands') && <div id="f-bands" tabIndex={-1}><Wrong id="f-bands-wrong" says={wrong.get('bands') ?? ''} /></div>}
+      {laterIsUp && add}
+      {count > 0 && <ol className="bands" reversed={laterIsUp}>{laterIsUp ? rows.toReversed() : rows}</ol>}
+      {!laterIsUp && add}
+    </section>
+  );
+}
+
+/** Which band is in hand: at first the one the page opens. */
+export function useChosenBand(open: number | null): readonly [number | null, (id: number) => void] {
+  return useState<number | null>(open === null ? null : open + 1);
+}

@@ -1,0 +1,51 @@
+import { useState } from 'react';
+import { isTechnique, TECHNIQUE_LABELS } from '#core/craft/piece-form/asked-of-band.ts';
+import { textOf, type TypedBand } from '#core/craft/piece-form/typed-piece.ts';
+import { Glyph } from '#islands/ui/Glyph.tsx';
+import { Parts } from '#islands/ui/Parts.tsx';
+import { BandFields } from './BandFields.tsx';
+import type { BandWords } from './band-words.ts';
+import { useHands } from './hands.ts';
+import { Patch } from './Patch.tsx';
+import { yarnOf, yarnWords } from './yarn-choices.ts';
+
+export interface BandRowProps {
+  readonly band: TypedBand;
+  readonly index: number;
+  readonly count: number;
+  /** Whether what is woven later stands further up in the list. */
+  readonly laterIsUp: boolean;
+  /** What the plan says of it; null while there is none. */
+  readonly words: BandWords | null;
+  readonly isChosen: boolean;
+  readonly isOpen: boolean;
+  readonly onChoose: (id: number) => void;
+}
+
+/** A band: its patch of cloth, technique, yarn and height in one line; open, everything it is asked. */
+export function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, onChoose }: BandRowProps) {
+  const { typed, wrong } = useHands();
+  const prefix = `bands.${String(index)}.`;
+  const [beginsOpen] = useState(isOpen || [...wrong.keys()].some((field) => field.startsWith(prefix)));
+  const yarn = yarnOf(typed, textOf(band.texts, 'yarn'));
+  const isWrong = [...wrong.keys()].some((field) => field.startsWith(prefix));
+  return (
+    <li id={`band-${String(index)}`}>
+      <details className={isChosen ? 'band on' : 'band'} open={beginsOpen} onFocus={() => onChoose(band.id)} onToggle={(event) => { if (event.currentTarget.open) onChoose(band.id); }}>
+        <summary>
+          <span className="at num" aria-hidden="true">{index + 1}</span>
+          <Patch patch={words?.patch ?? null} colour={yarn === undefined ? undefined : textOf(yarn, 'colour')} id={`patch-${String(band.id)}`} />
+          <span className="what"><b><span className="hide">Band {index + 1}, </span>{techniqueWords(band)}</b><span className="small quiet">{yarn === undefined ? 'no yarn yet' : yarnWords(yarn, 0)}{isWrong && <span className="wrong-here"><Glyph name="mend" />does not work yet</span>}</span></span>
+          <span className="num small">{words !== null && <><b><Parts parts={words.height} /></b><span className="quiet">{words.counts}</span></>}</span>
+        </summary>
+        <BandFields {...{ band, index, count, laterIsUp }} />
+      </details>
+    </li>
+  );
+}
+
+function techniqueWords({ texts, shapes }: TypedBand): string {
+  const technique = textOf(texts, 'technique');
+  if (!isTechnique(technique)) return 'Band';
+  return technique === 'tabby' && shapes.length > 0 ? 'Tabby with shapes' : TECHNIQUE_LABELS[technique];
+}
