@@ -25,6 +25,9 @@ export async function patternPiece(actor: Actor, slug: string): Promise<PatternP
     piece: kept?.data ?? null,
     revision: kept?.revision ?? 0,
     savedAt: kept?.updatedAt ?? null,
-    asking: inHand.parts.flatMap(({ number, title, unknownAmounts }) => (unknownAmounts.length === 0 ? [] : [{ part: number, title, keys: unknownAmounts }])),
+    asking: inHand.parts.flatMap(({ number, title, unknownAmounts, unknownListAmounts }) => {
+      const keys = [...new Set([...unknownAmounts, ...unknownListAmounts])];
+      return keys.length === 0 ? [] : [{ part: number, title, keys }];
+    }),
   };
 }
