@@ -12,8 +12,9 @@ export function EveryNumber({ made: { piece, plan }, units }: { readonly made: M
     const amount = amountOf(key, piece, plan);
     return amount.ok ? [amount.value] : [];
   });
+  // It may have been opened before the script came.
   return (
-    <details className="every-number">
+    <details className="every-number" suppressHydrationWarning>
       <summary>See every number</summary>
       <dl className="lined">
         {amounts.map((amount) => <div key={amount.key}><dt>{amount.label}{amount.key === 'warp.mass' && ', weight'}</dt><dd className="num"><Parts parts={formatAmount(amount, units)} /></dd></div>)}

@@ -11,7 +11,8 @@ import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
 
 export interface ToGatherProps {
-  readonly made: Made;
+  /** Null while the piece is not described: then lists say only what their teacher wrote. */
+  readonly made: Made | null;
   readonly units: Units;
   /** Reckoned for her own loom already: by what she typed, or by her own piece. */
   readonly own: boolean;
@@ -20,18 +21,23 @@ export interface ToGatherProps {
 
 export function ToGather({ lines, ...given }: ToGatherProps) {
   const { made, units, own } = useTried() ?? given;
-  const tools = lines.filter(({ kind }) => kind !== 'yarn');
+  const tools = made === null ? lines : lines.filter(({ kind }) => kind !== 'yarn');
   const standIns = tools.filter(({ standIn }) => standIn !== null);
   return (
     <>
-      <p className="small quiet">{own ? 'For your' : 'For the pattern’s'} {amountText(lengthOf(made.piece.size.widthMm, 'size'), units)}, with a margin.</p>
-      <YarnRows made={made} units={units} />
-      <h3 className="mt-5">Tools and what else</h3>
+      {made !== null && (
+        <>
+          <p className="small quiet">{own ? 'For your' : 'For the pattern’s'} {amountText(lengthOf(made.piece.size.widthMm, 'size'), units)}, with a margin.</p>
+          <YarnRows made={made} units={units} />
+          <h3 className="mt-5">Tools and what else</h3>
+        </>
+      )}
       <ul className="tools mt-2">
         {tools.map((line) => <li key={line.publicIds.join()}><span>{line.name}</span><span className="num small quiet"><HowMuch line={line} made={made} units={units} /></span></li>)}
       </ul>
+      {/* It may have been opened before the script came. */}
       {standIns.length > 0 && (
-        <details className="stand-ins mt-3">
+        <details className="stand-ins mt-3" suppressHydrationWarning>
           <summary>What can stand in for what</summary>
           <dl className="lined small">{standIns.map((line) => <div key={line.publicIds.join()}><dt>{line.name}</dt><dd>{line.standIn}</dd></div>)}</dl>
         </details>
@@ -62,8 +68,8 @@ function YarnRows({ made: { piece, plan }, units }: { readonly made: Made; reado
   );
 }
 
-function HowMuch({ line: { amountKey, amountText: words }, made: { piece, plan }, units }: { readonly line: MergedLine; readonly made: Made; readonly units: Units }) {
-  const amount = amountKey === null ? null : amountOf(amountKey, piece, plan);
+function HowMuch({ line: { amountKey, amountText: words }, made, units }: { readonly line: MergedLine; readonly made: Made | null; readonly units: Units }) {
+  const amount = amountKey === null || made === null ? null : amountOf(amountKey, made.piece, made.plan);
   const parts: readonly AmountPart[] = amount?.ok === true ? formatAmount(amount.value, units) : [{ kind: 'text', text: words ?? '' }];
   return <Parts parts={parts} />;
 }

@@ -41,6 +41,9 @@ function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, 
   const settled = useDeferredValue(typed);
   const trial = useMemo(() => tryOnLoom(pattern, name, settled), [pattern, name, settled]);
   const fitted = fittedBy(trial);
+  // While something typed cannot be read, the looms stay as they were last.
+  const [drawn, setDrawn] = useState(trial);
+  if (trial.ok && trial !== drawn) setDrawn(trial);
 
   const change = (next: TypedLoom): void => { setTyped(next); setOwn(true); };
   const address = (loom: TypedLoom): string => `/series/${slug}?${new URLSearchParams(loomFields(loom).map(([field, value]) => [field, value])).toString()}#try`;
@@ -73,7 +76,7 @@ function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, 
         {!alive && typed.narrower && <input type="hidden" name="wide" value="most" />}
         {!alive && <button className="btn" type="submit">Reckon for this loom</button>}
       </form>
-      <TrialLooms name={name} teacher={teacher} asPattern={asPattern} trial={trial} units={settled.units} own={own} />
+      <TrialLooms name={name} teacher={teacher} asPattern={asPattern} trial={drawn} units={settled.units} own={own} />
       <TrialAnswer
         {...{ teacher, asPattern, trial, own }}
         units={settled.units}

@@ -28,7 +28,7 @@ export function newRequest({ orderId, attempt, amountMinor, currency, series, bu
     lines: [{ name: series.title, description: 'A seat in the series', amountMinor, quantity: 1 }],
     buyerAddress,
     successUrl: `${seatPage(series.slug)}?checkout={CHECKOUT_SESSION_ID}`,
-    cancelUrl: `${config().publicUrl}/series/${series.slug}?paying=stopped`,
+    cancelUrl: `${config().publicUrl}/series/${series.slug}?paying=stopped#take`,
     expiresAt: checkoutExpiry(now).toISOString(),
   };
 }
