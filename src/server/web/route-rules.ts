@@ -54,6 +54,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/_actions/[...path]': 'public',
   '/_image': 'public',
   '/_server-islands/[name]': 'public',
+  '/workroom/money': 'teacher',
+  '/workroom/students': 'teacher',
   '/workroom/bench': 'bench',
   '/workroom/series/new': 'teacher',
   '/workroom/series/[slug]': 'teacher',
