@@ -54,10 +54,12 @@ function OwnYarn({ role, patternYarn, typed, fitted, faults, change, alive }: Om
   const planned = fitted?.plan.yarns[role];
   const label = own ? (textOf(texts, 'label').trim() || 'Your own yarn') : (patternYarn.label ?? role);
   const grist = gristAsked(by);
+  const typedColour = textOf(texts, 'colour');
+  const colourNow = typedColour === '' ? (patternYarn.colour ?? '#d8d2c1') : typedColour;
   return (
     <details className="own-yarn" open={wrong || undefined}>
       <summary>
-        <YarnDot colour={own ? (textOf(texts, 'colour') || patternYarn.colour) : patternYarn.colour} />
+        <YarnDot colour={own ? colourNow : patternYarn.colour} />
         <span><b>{label}</b><span className="small quiet">{own ? ` for ${patternYarn.label ?? role} (${role})` : ` (${role}), as in the pattern`}</span></span>
         {planned !== undefined && <span className="num"><Parts parts={formatAmount(lengthOf(planned.withMarginMm, 'yarn'), typed.units)} /></span>}
       </summary>
@@ -69,7 +71,7 @@ function OwnYarn({ role, patternYarn, typed, fitted, faults, change, alive }: Om
             <Field {...fieldProps('wrapsPerInch')} label="Wraps in an inch" optional={by !== 'wraps'} hint="Wound snugly round a ruler and counted." inputMode="decimal" />
             <Field {...fieldProps('strands')} label="Strands as one" optional hint="How many threads are taken together." inputMode="numeric" />
             <Field {...fieldProps('label')} label="Name on the label" optional />
-            <Field {...fieldProps('colour')} label="Colour" type="color" value={textOf(texts, 'colour') || patternYarn.colour || '#d8d2c1'} className="colour-field" />
+            <Field {...fieldProps('colour')} label="Colour" type="color" value={colourNow} className="colour-field" />
           </>
         )}
       </div>

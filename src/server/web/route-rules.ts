@@ -33,6 +33,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/ticks': 'signed-in',
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
+  '/series/[slug]/[part]/loomside': 'public',
   '/series/[slug]/gather': 'public',
   '/series/[slug]/piece': 'signed-in',
   '/loom': 'signed-in',
