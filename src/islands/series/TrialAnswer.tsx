@@ -20,11 +20,13 @@ interface TrialAnswerProps {
   readonly own: boolean;
   readonly narrowerHref: string;
   readonly widerHref: string;
+  /** Where who has a seat puts this loom into her own piece. */
+  readonly keepHref: string | undefined;
   /** Takes the place of the links once the page is alive. */
   readonly onNarrower?: ((narrower: boolean) => void) | undefined;
 }
 
-export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHref, widerHref, onNarrower }: TrialAnswerProps) {
+export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHref, widerHref, keepHref, onNarrower }: TrialAnswerProps) {
   const fitted = fittedBy(trial);
   const here = (narrower: boolean) => onNarrower && ((event: MouseEvent) => { event.preventDefault(); onNarrower(narrower); });
   return (
@@ -47,6 +49,7 @@ export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHre
           <p className="quiet">For a frame {amountText(lengthOf(trial.fitted.piece.loom.insideHeightMm, 'size'), units)} from nail to nail upright, as the pattern’s. {amountText(lengthOf(trial.fitted.plan.loom.heightNeededMm, 'least'), units)} are enough.</p>
         </div>
       )}
+      {fitted !== null && own && keepHref !== undefined && <p><a href={keepHref}>Use this loom for your piece</a></p>}
       {fitted !== null && <EveryNumber made={fitted} units={units} />}
     </div>
   );

@@ -26,6 +26,8 @@ export interface TryOnLoomProps {
   readonly units: Units;
   /** Id of the form that takes a seat: what is typed here goes along with it. */
   readonly seatForm: string;
+  /** Who has a seat may put the loom into her own piece. */
+  readonly hasSeat: boolean;
 }
 
 export function TryOnLoom(props: TryOnLoomProps) {
@@ -33,7 +35,7 @@ export function TryOnLoom(props: TryOnLoomProps) {
   return asPattern === null ? null : <Trying {...props} asPattern={asPattern} />;
 }
 
-function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, asPattern }: TryOnLoomProps & { asPattern: Made }) {
+function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, hasSeat, asPattern }: TryOnLoomProps & { asPattern: Made }) {
   const [typed, setTyped] = useState<TypedLoom>(before ?? loomOfPattern(asPattern, units));
   const [own, setOwn] = useState(before !== null);
   const [alive, setAlive] = useState(false);
@@ -46,7 +48,8 @@ function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, 
   if (trial.ok && trial !== drawn) setDrawn(trial);
 
   const change = (next: TypedLoom): void => { setTyped(next); setOwn(true); };
-  const address = (loom: TypedLoom): string => `/series/${slug}?${new URLSearchParams(loomFields(loom).map(([field, value]) => [field, value])).toString()}#try`;
+  const query = (loom: TypedLoom): string => new URLSearchParams(loomFields(loom).map(([field, value]) => [field, value])).toString();
+  const address = (loom: TypedLoom): string => `/series/${slug}?${query(loom)}#try`;
 
   // What was typed before the browser had read this script stands in the fields already.
   useEffect(() => {
@@ -82,6 +85,7 @@ function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, 
         units={settled.units}
         narrowerHref={address({ ...settled, narrower: true })}
         widerHref={address({ ...settled, narrower: false })}
+        keepHref={hasSeat ? `/series/${slug}/piece?${query(settled)}` : undefined}
         onNarrower={alive ? (narrower) => change({ ...typed, narrower }) : undefined}
       />
       {own && loomFields(typed).map(([field, value]) => <input key={field} type="hidden" form={seatForm} name={field} value={value} />)}

@@ -19,11 +19,11 @@ afterEach(() => {
 
 const MAUDS: TypedLoom = { inside: '36', spacing: '8', ends: 2, units: 'cm', narrower: false };
 
-function Trial({ typed = null }: { readonly typed?: TypedLoom | null }) {
+function Trial({ typed = null, hasSeat = false }: { readonly typed?: TypedLoom | null; readonly hasSeat?: boolean }) {
   return (
     <>
       <form id="take-seat" aria-label="Take a seat" />
-      <TryOnLoom slug="low-tide" name="Low Tide" teacher="Ilse" pattern={pattern} typed={typed} units="cm" seatForm="take-seat" />
+      <TryOnLoom slug="low-tide" name="Low Tide" teacher="Ilse" pattern={pattern} typed={typed} units="cm" seatForm="take-seat" hasSeat={hasSeat} />
     </>
   );
 }
@@ -96,6 +96,14 @@ describe('a loom that is tried', () => {
     expect(figure('Warp')).toMatch(/yd/);
     await userEvent.click(screen.getByLabelText('cm'));
     expect(screen.getByLabelText<HTMLInputElement>('Inside width').value).toBe('50');
+  });
+
+  it('that fits can be put into her own piece by who has a seat', () => {
+    render(<Trial typed={{ ...MAUDS, narrower: true }} hasSeat />);
+    expect(screen.getByRole('link', { name: 'Use this loom for your piece' }).getAttribute('href')).toBe('/series/low-tide/piece?inside=36&spacing=8&ends=2&units=cm&wide=most');
+    cleanup();
+    render(<Trial typed={{ ...MAUDS, narrower: true }} />);
+    expect(screen.queryByRole('link', { name: 'Use this loom for your piece' })).toBeNull();
   });
 
   it('has every number when asked', async () => {
