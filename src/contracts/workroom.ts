@@ -1,5 +1,6 @@
 /** What a teacher writes in her workroom: series, parts, gathering lists. The sentences are what she reads at the field. */
 import { z } from 'astro/zod';
+import type { LessonProblem } from '#core/lesson-text/problem.ts';
 
 const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
 const publicId = z.string().regex(/^[0-9a-z]{26}$/);
@@ -47,6 +48,23 @@ export type LessonDraftInput = z.output<typeof LessonDraftForm>;
 
 /** A text to be read while it is being written; nothing is kept. */
 export const LessonCheckInput = LessonDraftForm.pick({ source: true });
+
+/** How a text was read: without problems it can be published. */
+export interface TextRemarks {
+  readonly problems: readonly LessonProblem[];
+  readonly warnings: readonly LessonProblem[];
+}
+
+/** The draft was kept. `savedAt` is a time of day on the teacher's clock. */
+export interface DraftKept extends TextRemarks {
+  readonly revision: number;
+  readonly savedAt: string;
+}
+
+/** The draft was not kept, because another window kept `source` in the meantime. */
+export interface DraftBehind {
+  readonly behind: { readonly revision: number; readonly source: string };
+}
 
 export const LessonSettingsForm = z.object({
   lesson: publicId,

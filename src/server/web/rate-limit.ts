@@ -33,7 +33,9 @@ export const RATE_RULES = {
   spendLink: { name: 'spend-link', limit: 60, windowSeconds: 3_600 },
   checkout: { name: 'checkout', limit: 10, windowSeconds: 3_600 },
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
-  preview: { name: 'preview', limit: 120, windowSeconds: 60 },
+  /** Texts read while they are being written, and drafts kept by themselves, of one teacher. */
+  lessonCheck: { name: 'lesson-check', limit: 120, windowSeconds: 60 },
+  lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },
 } as const satisfies Record<string, RateRule>;
 
 /** The part of a network address that one household or office shares: /24 of IPv4, /64 of IPv6. */

@@ -3,12 +3,12 @@ import type { z } from 'astro/zod';
 import { AppError } from '#server/errors.ts';
 import { fieldSentences } from '#server/web/form.ts';
 
-const MOST_BYTES = 64 * 1_024;
+const KIB = 1_024;
 
-/** @throws TOO_LARGE beyond 64 KiB; VALIDATION for what is no JSON or does not fit, by field. */
-export async function readJson<T>(request: Request, schema: z.ZodType<T, z.ZodTypeDef, unknown>): Promise<T> {
+/** @throws TOO_LARGE beyond `mostKib`; VALIDATION for what is no JSON or does not fit, by field. */
+export async function readJson<T>(request: Request, schema: z.ZodType<T, z.ZodTypeDef, unknown>, mostKib = 64): Promise<T> {
   const text = await request.text();
-  if (Buffer.byteLength(text) > MOST_BYTES) throw new AppError('TOO_LARGE', { says: 'At most 64 KiB work here.' });
+  if (Buffer.byteLength(text) > mostKib * KIB) throw new AppError('TOO_LARGE', { says: `At most ${mostKib} KiB work here.` });
   let data: unknown;
   try {
     data = JSON.parse(text);

@@ -31,6 +31,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/photos': 'signed-in',
   '/api/reckon': 'machine',
   '/api/ticks': 'signed-in',
+  '/api/workroom/lesson-check': 'teacher',
+  '/api/workroom/lesson-draft': 'teacher',
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
   '/series/[slug]/[part]/loomside': 'public',
@@ -61,4 +63,6 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/series/new': 'teacher',
   '/workroom/series/[slug]': 'teacher',
   '/workroom/series/[slug]/piece': 'teacher',
+  '/workroom/series/[slug]/parts/[part]': 'teacher',
+  '/workroom/series/[slug]/parts/[part]/preview': 'teacher',
 };

@@ -1,0 +1,33 @@
+/** What the pages of one part draw alike from its desk. */
+import { amountChoices, type AmountGroup } from '#core/craft/amount-choices.ts';
+import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
+import { planPiece } from '#core/craft/plan.ts';
+import { titleHalves } from '#core/series/title.ts';
+import type { Units } from '#core/units/units.ts';
+import type { Sayable } from '#islands/workroom/PutInButtons.tsx';
+import type { LessonDesk } from '#server/queries/workroom/lesson-desk.ts';
+
+/** The amounts the pattern piece tells; empty while it is not described. */
+export function amountsOfDesk({ pattern }: Pick<LessonDesk, 'pattern'>, units: Units): AmountGroup[] {
+  const plan = pattern === null ? null : planPiece(pattern, units);
+  return pattern !== null && plan?.ok === true ? amountChoices(pattern, plan.value, units) : [];
+}
+
+export function sayableOf({ media }: Pick<LessonDesk, 'media'>, amounts: readonly AmountGroup[]): Sayable {
+  return {
+    amounts: amounts.flatMap(({ choices }) => choices.map(({ key, label, text }) => ({ value: key, label: `${label}: ${text}` }))),
+    figures: FIGURE_KINDS.map((kind) => ({ value: kind, label: capital(kind.replaceAll('-', ' ')) })),
+    media: media.map(({ kind, name, title }) => ({ value: `${kind}/${name}`, label: `${capital(kind)}: ${title === '' ? name : title}` })),
+  };
+}
+
+export function crumbsOf({ series: { slug, title } }: Pick<LessonDesk, 'series'>): { href: string; label: string }[] {
+  return [{ href: '/workroom#series', label: 'Series' }, { href: `/workroom/series/${slug}`, label: titleHalves(title).name }];
+}
+
+/** `Part 3, Rya fringe`, for the head of the document. */
+export function nameOfPart({ number, title }: Pick<LessonDesk, 'number' | 'title'>): string {
+  return number === null ? title : `Part ${number}, ${title}`;
+}
+
+const capital = (words: string): string => `${words.charAt(0).toUpperCase()}${words.slice(1)}`;

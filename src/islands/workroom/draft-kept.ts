@@ -1,0 +1,2 @@
+/** Said on the document when a draft that can be read was kept, so that its preview is drawn anew. */
+export const DRAFT_KEPT = 'fellmark:draft-kept';

@@ -1,0 +1,82 @@
+/** One part as its teacher writes it: her text, how it was read, its settings, and what it can speak of. */
+import { QueryTypes } from 'sequelize';
+import type { Checkpoint } from '#contracts/lesson.ts';
+import type { SeriesMediaFile } from '#contracts/media.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
+import type { OpeningRule } from '#core/timetable/opening.ts';
+import type { Actor } from '#server/context.ts';
+import { sequelize } from '#server/db/sequelize.ts';
+import { Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
+import { mayTeachIn } from '#server/policies/workroom.ts';
+import { mediaOfSeries } from '#server/queries/media/media-of-series.ts';
+
+export interface PartOfSeries {
+  readonly id: number;
+  readonly publicId: string;
+  readonly number: number;
+  readonly title: string;
+  readonly asksForPhoto: boolean;
+}
+
+export interface SeatChoice {
+  /** Public id of the seat. */
+  readonly seat: string;
+  readonly studentName: string;
+}
+
+export interface LessonDesk {
+  readonly series: { readonly id: number; readonly slug: string; readonly title: string; readonly state: Series['state']; readonly workroomName: string; readonly timeZone: string };
+  /** All parts that are in, in their order. */
+  readonly parts: readonly PartOfSeries[];
+  /** Its place in that order; null for a part that was taken out. */
+  readonly number: number | null;
+  readonly publicId: string;
+  readonly title: string;
+  readonly minutes: number;
+  readonly isPreview: boolean;
+  readonly opens: OpeningRule;
+  readonly checkpoint: Checkpoint | null;
+  readonly draft: { readonly source: string; readonly revision: number; readonly reading: LessonText | RefusedText };
+  /** What students read; null before it was published. */
+  readonly published: { readonly number: number; readonly at: Date; readonly source: string } | null;
+  readonly pattern: Piece | null;
+  readonly media: readonly SeriesMediaFile[];
+  /** People inside, by name; the first hundred. */
+  readonly seats: readonly SeatChoice[];
+}
+
+const SEATS = `
+  SELECT e.public_id AS seat, u.name AS studentName
+    FROM enrolments e JOIN users u ON u.id = e.user_id
+   WHERE e.series_id = ? AND e.state = 'active'
+   ORDER BY u.name, e.id LIMIT 100`;
+
+/** @returns null when there is no such part in a series of the asker. */
+export async function lessonDesk(actor: Actor, slug: string, publicId: string): Promise<LessonDesk | null> {
+  const series = await Series.findOne({ where: { slug } });
+  if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
+  const lesson = await Lesson.findOne({ where: { publicId, seriesId: series.id } });
+  if (lesson === null) return null;
+  const [workroom, others, version, piece, media, seats] = await Promise.all([
+    Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
+    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['id', 'publicId', 'title', 'checkpoint'] }),
+    lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
+    PatternPiece.findByPk(series.id),
+    mediaOfSeries(series.id),
+    sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
+  ]);
+  const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null }));
+  const { title, minutes, isPreview, opens, checkpoint, draftSource, draftRevision, draftReading } = lesson;
+  return {
+    series: { id: series.id, slug, title: series.title, state: series.state, workroomName: workroom.name, timeZone: workroom.timeZone },
+    parts,
+    number: parts.find((part) => part.publicId === publicId)?.number ?? null,
+    publicId, title, minutes, isPreview, opens, checkpoint,
+    draft: { source: draftSource, revision: draftRevision, reading: draftReading },
+    published: version === null ? null : { number: version.number, at: version.createdAt, source: version.source },
+    pattern: piece?.data ?? null,
+    media,
+    seats,
+  };
+}
