@@ -24,6 +24,7 @@ function type(field: HTMLTextAreaElement, from: number, to: number, text: string
   field.focus({ preventScroll: true });
   field.setSelectionRange(from, to);
   const before = field.value;
+  // eslint-disable-next-line @typescript-eslint/no-deprecated -- nothing else keeps a field's own undo
   const typed = text === '' ? document.execCommand('delete') : document.execCommand('insertText', false, text);
   if (typed && field.value !== before) return;
   field.setRangeText(text, from, to, 'end');

@@ -64,5 +64,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/series/[slug]': 'teacher',
   '/workroom/series/[slug]/piece': 'teacher',
   '/workroom/series/[slug]/parts/[part]': 'teacher',
+  '/workroom/series/[slug]/parts/[part]/gather': 'teacher',
   '/workroom/series/[slug]/parts/[part]/preview': 'teacher',
+  '/workroom/series/[slug]/parts/[part]/settings': 'teacher',
+  '/workroom/series/[slug]/parts/[part]/versions': 'teacher',
 };

@@ -7,7 +7,7 @@ import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-tex
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
+import { GatheringItem, Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { mediaOfSeries } from '#server/queries/media/media-of-series.ts';
 
@@ -17,6 +17,18 @@ export interface PartOfSeries {
   readonly number: number;
   readonly title: string;
   readonly asksForPhoto: boolean;
+  readonly opens: OpeningRule;
+}
+
+export interface ListLine {
+  readonly publicId: string;
+  readonly kind: 'tool' | 'yarn' | 'material';
+  readonly name: string;
+  readonly amountKey: string | null;
+  readonly amountText: string | null;
+  readonly standIn: string | null;
+  readonly untilPart: number | null;
+  readonly note: string | null;
 }
 
 export interface SeatChoice {
@@ -40,6 +52,8 @@ export interface LessonDesk {
   readonly draft: { readonly source: string; readonly revision: number; readonly reading: LessonText | RefusedText };
   /** What students read; null before it was published. */
   readonly published: { readonly number: number; readonly at: Date; readonly source: string } | null;
+  /** Its gathering list, in order. */
+  readonly list: readonly ListLine[];
   readonly pattern: Piece | null;
   readonly media: readonly SeriesMediaFile[];
   /** People inside, by name; the first hundred. */
@@ -58,15 +72,16 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
   const lesson = await Lesson.findOne({ where: { publicId, seriesId: series.id } });
   if (lesson === null) return null;
-  const [workroom, others, version, piece, media, seats] = await Promise.all([
+  const [workroom, others, version, list, piece, media, seats] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
-    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['id', 'publicId', 'title', 'checkpoint'] }),
+    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['id', 'publicId', 'title', 'checkpoint', 'opens'] }),
     lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
+    GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
     mediaOfSeries(series.id),
     sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
   ]);
-  const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null }));
+  const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));
   const { title, minutes, isPreview, opens, checkpoint, draftSource, draftRevision, draftReading } = lesson;
   return {
     series: { id: series.id, slug, title: series.title, state: series.state, workroomName: workroom.name, timeZone: workroom.timeZone },
@@ -75,6 +90,7 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
     publicId, title, minutes, isPreview, opens, checkpoint,
     draft: { source: draftSource, revision: draftRevision, reading: draftReading },
     published: version === null ? null : { number: version.number, at: version.createdAt, source: version.source },
+    list: list.map(({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note }) => ({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note })),
     pattern: piece?.data ?? null,
     media,
     seats,

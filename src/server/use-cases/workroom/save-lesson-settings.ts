@@ -17,6 +17,7 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
   const workroom = found(await Workroom.findByPk(series.workroomId));
   return withSeriesLocked(series, async (locked) => {
     const lesson = found(await Lesson.findByPk(known.id));
+    refuseStrayField(input, lesson.opens);
     const opens = await openingOf(ctx, input, lesson, workroom.timeZone);
     await lesson.update({
       title: input.title,
@@ -32,6 +33,17 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
     });
     return placeOf(series, lesson);
   });
+}
+
+/** Something newly typed beside a rule that is not chosen is mostly meant: better to ask than to drop it. */
+function refuseStrayField({ rule, wall = '', days = '', after = '' }: LessonSettingsInput, kept: OpeningRule): void {
+  const typed = [
+    { rule: 'on-date', field: 'wall', value: wall, was: kept.rule === 'on-date' ? kept.wall : '', name: 'On a date' },
+    { rule: 'after-seat', field: 'days', value: days.trim(), was: kept.rule === 'after-seat' ? String(kept.days) : '', name: 'Some days after the seat began' },
+    { rule: 'after-verdict', field: 'after', value: after, was: kept.rule === 'after-verdict' ? kept.lesson : '', name: 'After you have seen a photo' },
+  ] as const;
+  const stray = typed.find((one) => one.rule !== rule && one.value !== '' && one.value !== one.was);
+  if (stray !== undefined) throw fieldError(stray.field, `This is filled in, but another way is chosen. Choose “${stray.name}” above it, or empty it.`);
 }
 
 function checkpointOf({ asksForPhoto, ask, look }: LessonSettingsInput): Checkpoint | null {
