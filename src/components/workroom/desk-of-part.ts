@@ -1,4 +1,5 @@
-/** What the pages of one part draw alike from its desk. */
+/** What the pages of a series and its parts draw alike. */
+import type { SitePerson } from '#components/site/person.ts';
 import { amountChoices, type AmountGroup } from '#core/craft/amount-choices.ts';
 import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
 import { planPiece } from '#core/craft/plan.ts';
@@ -23,6 +24,11 @@ export function sayableOf({ media }: Pick<LessonDesk, 'media'>, amounts: readonl
 
 export function crumbsOf({ series: { slug, title } }: Pick<LessonDesk, 'series'>): { href: string; label: string }[] {
   return [{ href: '/workroom#series', label: 'Series' }, { href: `/workroom/series/${slug}`, label: titleHalves(title).name }];
+}
+
+/** The person with the name of her workroom beside the mark. */
+export function inWorkroom(person: SitePerson | null | undefined, workroom: string): SitePerson | null {
+  return person === null || person === undefined ? null : { ...person, workroom };
 }
 
 /** `Part 3, Rya fringe`, for the head of the document. */
