@@ -12,7 +12,7 @@ const shared = {
   maxWorkers: 2,
 };
 /** These talk to the outside, stand at the door or run beside, and need no database. */
-const withoutDatabase = 'tests/server/{payments,stand-ins,mail,lesson-text,web/front,drawing}/**/*.test.ts';
+const withoutDatabase = 'tests/server/{payments,stand-ins,mail,lesson-text,web/front,drawing,start}/**/*.test.ts';
 
 export default defineConfig({
   root,
