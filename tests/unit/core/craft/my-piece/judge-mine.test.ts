@@ -1,0 +1,103 @@
+import { describe, expect, test } from 'vitest';
+import { judgeMine, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { inOtherUnits, mineOfFields, typeMine, withTriedLoom } from '#core/craft/my-piece/typed-mine.ts';
+import { widestOnLoom } from '#core/craft/my-piece/widest-on-loom.ts';
+import { lowTide } from '../../../../support/low-tide.ts';
+
+const pattern = await lowTide();
+type Fields = Readonly<Record<string, string>>;
+const typed = (fields: Fields) => mineOfFields((name) => fields[name], pattern);
+const judge = (fields: Fields): MineJudgement => judgeMine(typed(fields), pattern);
+const says = (fields: Fields): Readonly<Record<string, string>> => {
+  const judged = judge(fields);
+  return judged.ok ? {} : Object.fromEntries(judged.problems.map(({ field, says: sentence }) => [field, sentence]));
+};
+
+describe('lengths as people type them', () => {
+  test.each([
+    ['36', 'cm', 360], ['36,5', 'cm', 365], ['36.5', 'cm', 365], ['14 7/8', 'in', 377.825], ['360 mm', 'in', 360],
+  ])('%s in %s', (text, units, mm) => {
+    const judged = judge({ insideWidthMm: text, units, shown: units, widthMm: '20 cm' });
+    expect(judged).toMatchObject({ ok: true, mine: { loom: { insideWidthMm: mm } } });
+  });
+
+  test('what stays empty is as in the pattern', () => {
+    expect(judge({ endsTogether: '1', warping: 'zigzag' })).toMatchObject({ ok: true, mine: {} });
+  });
+});
+
+describe('impossible looms are told at the field, with what works', () => {
+  test.each([
+    ['insideWidthMm', '3 mm', 'Too narrow for a frame. Between 5\u00a0cm and 300\u00a0cm works.'],
+    ['insideWidthMm', '30 m', 'Too wide for a frame. Between 5\u00a0cm and 300\u00a0cm works.'],
+    ['insideHeightMm', '2', 'Too low for a frame. Between 10\u00a0cm and 300\u00a0cm works.'],
+    ['nailPitchMm', '40', 'Too far apart to weave on. Between 2\u00a0mm and 25\u00a0mm works.'],
+    ['insideWidthMm', 'as wide as my arm', 'Write one length, like 12.5 or 4 7/8.'],
+    ['nailPitchMm', '-8', 'A length cannot be below 0.'],
+  ])('%s %s', (field, text, sentence) => {
+    expect(says({ [field]: text })).toEqual({ [field]: sentence });
+  });
+
+  test('a loom too narrow for the piece says how wide it may be', () => {
+    expect(says({ insideWidthMm: '28' })['insideWidthMm']).toMatch(/^The loom is 28\scm inside\. .* up to [\d.]+\scm fit\.$/);
+  });
+
+  test('several slips are told at once', () => {
+    expect(Object.keys(says({ insideWidthMm: 'x', nailPitchMm: 'y', 'yarns.shore.by': 'tex' })).sort()).toEqual(['insideWidthMm', 'nailPitchMm', 'yarns.shore.grist']);
+  });
+});
+
+describe('her own yarn', () => {
+  const yarn = (by: string, grist: string, more: Fields = {}) => judge({ 'yarns.water.by': by, 'yarns.water.grist': grist, ...more });
+
+  test.each([
+    ['metresPer100g', '300', { metresPer100g: 300 }],
+    ['tex', '333,5', { tex: 333.5 }],
+    ['nm', '2/6', { count: { text: '2/6', system: 'nm' } }],
+    ['ne-cotton', '8/2', { count: { text: '8/2', system: 'ne-cotton' } }],
+  ])('by %s', (by, grist, expected) => {
+    expect(yarn(by, grist)).toMatchObject({ ok: true, mine: { yarns: { water: expected } } });
+  });
+
+  test('by wraps alone, where there is no label', () => {
+    const judged = yarn('wraps', '', { 'yarns.water.wrapsPerInch': '16' });
+    expect(judged).toMatchObject({ ok: true, mine: { yarns: { water: { wrapsPerInch: 16 } } } });
+  });
+
+  test('a count that is none, and a yarn that cannot be, are told at the field', () => {
+    expect(says({ 'yarns.water.by': 'nm', 'yarns.water.grist': 'thick' })['yarns.water.grist']).toContain('is not a count');
+    expect(says({ 'yarns.water.by': 'tex', 'yarns.water.grist': '0' })['yarns.water.grist']).toContain('works');
+  });
+
+  test('a role the pattern does not have is not read', () => {
+    expect(judge({ 'yarns.__proto__.by': 'tex', 'yarns.other.by': 'tex' })).toMatchObject({ ok: true, mine: {} });
+  });
+});
+
+test('what was kept comes back as it was typed, number for number', () => {
+  const mine = { loom: { insideWidthMm: 377.825, nailPitchMm: 8, warping: 'two-nail' }, widthMm: 200, endsTogether: 2, yarns: { ridge: { label: 'Attic', tex: 250, strands: 3, colour: '#112233' } } } as const;
+  for (const units of ['cm', 'in'] as const) {
+    const judged = judgeMine(typeMine(mine, pattern, units), pattern);
+    expect(judged.ok && judged.mine).toEqual(mine);
+  }
+});
+
+test('other units keep every length, and leave alone what cannot be read', () => {
+  const inches = inOtherUnits(typed({ insideWidthMm: '50,8', nailPitchMm: 'eight' }), 'in');
+  expect(inches.texts).toMatchObject({ insideWidthMm: '20', nailPitchMm: 'eight' });
+});
+
+test('the loom that was tried before buying stands in the form', () => {
+  const before = typeMine({}, pattern, 'cm');
+  const after = withTriedLoom(before, { inside: '30', spacing: '8', ends: 2, units: 'cm', narrower: true }, pattern);
+  expect(after.texts).toMatchObject({ insideWidthMm: '30', nailPitchMm: '8', endsTogether: '2' });
+  expect(judgeMine(after, pattern).ok).toBe(true);
+});
+
+test('the widest that fits does fit, and nothing is offered where nothing would', () => {
+  const narrow = typed({ insideWidthMm: '28', nailPitchMm: '8', endsTogether: '2' });
+  const widest = widestOnLoom(narrow, pattern);
+  expect(widest).not.toBeNull();
+  expect(judgeMine({ ...narrow, texts: { ...narrow.texts, widthMm: `${String(widest)} mm` } }, pattern).ok).toBe(true);
+  expect(widestOnLoom(typed({ insideWidthMm: '6' }), pattern)).toBeNull();
+});

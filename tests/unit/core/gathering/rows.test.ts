@@ -1,0 +1,69 @@
+import { describe, expect, test } from 'vitest';
+import { madeFor } from '#core/craft/made-for.ts';
+import type { GatheringLine } from '#core/gathering/merge.ts';
+import { gatherRows, loomWords, partRows, partsWords, type ShownFor } from '#core/gathering/rows.ts';
+import { lowTide } from '../../../support/low-tide.ts';
+
+const pattern = await lowTide();
+const shownFor = (mine = {}): ShownFor => ({ made: madeFor(pattern, mine, 'cm'), pattern, units: 'cm' });
+let count = 0;
+function line(part: number, given: Partial<GatheringLine>): GatheringLine {
+  count += 1;
+  return { publicId: `id${count}`, part, kind: 'tool', name: 'Blunt needle', amountKey: null, amountText: '1', standIn: null, untilPart: null, note: null, ticked: false, ...given };
+}
+const estuary = { kind: 'yarn', name: 'Fenwool 6/2, Estuary', amountText: null } as const;
+const textOf = (amount: unknown): string => (Array.isArray(amount) ? amount.map(({ text }: { text: string }) => text).join('') : String(amount));
+
+describe('the list of a whole series', () => {
+  test('a tool that three parts ask for stands once, and one tick is enough', () => {
+    const rows = gatherRows([line(1, {}), line(2, { ticked: true }), line(5, {})], shownFor());
+    expect(rows).toHaveLength(1);
+    expect(rows[0]).toMatchObject({ ticked: true, when: 'Parts 1, 2 and 5' });
+    expect(rows[0]?.items).toHaveLength(3);
+  });
+
+  test('the yarn of one band, and what is left of a yarn, are within the yarn’s own line', () => {
+    const rows = gatherRows([line(1, { ...estuary, amountKey: 'yarn.shore' }), line(4, { ...estuary, amountKey: 'band.dark-shore.yarn' }), line(5, { ...estuary, amountText: 'what is left of it' })], shownFor());
+    expect(rows).toHaveLength(1);
+    expect(textOf(rows[0]?.amount)).toMatch(/^\d+\u00a0m$/);
+    expect(rows[0]?.also).toMatch(/g, 1 ball$/);
+  });
+
+  test('her own yarn stands under its own name, without what could stand in for the other', () => {
+    const mine = { yarns: { shore: { label: 'Attic blue', tex: 300 } } };
+    const [row] = gatherRows([line(1, { ...estuary, amountKey: 'yarn.shore', standIn: 'Any dark yarn' })], shownFor(mine));
+    expect(row).toMatchObject({ name: 'Attic blue (for Fenwool 6/2, Estuary)', standIn: '' });
+  });
+
+  test('without a piece the teacher’s own words are left', () => {
+    const [row] = gatherRows([line(1, { ...estuary, amountKey: 'yarn.shore', amountText: 'one ball' })], { made: null, pattern: null, units: 'cm' });
+    expect(row).toMatchObject({ amount: 'one ball', also: '' });
+  });
+});
+
+test('the list of one part keeps its own amount, and ticks the thing wherever it is asked for', () => {
+  const lines = [line(1, { ...estuary, amountKey: 'yarn.shore', ticked: true }), line(4, { ...estuary, amountKey: 'band.dark-shore.yarn' })];
+  const [whole] = gatherRows(lines, shownFor());
+  const [own] = partRows(lines, 4, shownFor());
+  expect(own).toMatchObject({ ticked: true, key: whole?.key, when: 'Part 4' });
+  expect(textOf(own?.amount)).not.toBe(textOf(whole?.amount));
+});
+
+test.each([
+  [[3], null, 'Part 3'],
+  [[1, 2], 7, 'Parts 1 and 2, kept until Part 7'],
+  [[6, 2, 3, 4], 6, 'Parts 2 to 4 and 6'],
+])('parts %j until %s read: %s', (parts, until, words) => {
+  expect(partsWords(parts, until)).toBe(words);
+});
+
+test('the loom is told as its owner would tell it', () => {
+  const made = madeFor(pattern, { loom: { insideWidthMm: 360, nailPitchMm: 4 }, widthMm: 300, endsTogether: 2 }, 'cm');
+  expect(made && loomWords(made, 'cm')).toMatch(/^36\u00a0cm inside, nails every 4\u00a0mm.*, doubled ends: \d+ ends, woven 30\u00a0cm wide$/);
+});
+
+test('a piece that no longer fits the changed pattern gives way to it, and says why', () => {
+  const made = madeFor(pattern, { loom: { insideWidthMm: 60 } }, 'cm');
+  expect(made?.isOwn).toBe(false);
+  expect(made?.problems[0]?.path).toBe('/loom/insideWidthMm');
+});
