@@ -1,0 +1,127 @@
+/** The series of one or several workrooms with everybody who has a seat, and where each of them is. Always five statements. */
+import { QueryTypes } from 'sequelize';
+import type { Piece } from '#core/craft/piece.ts';
+import type { Verdict } from '#core/following/progress.ts';
+import { classPlace, type PartOfOne } from '#core/workroom/class-place.ts';
+import { sequelize } from '#server/db/sequelize.ts';
+
+export interface ClassPart {
+  readonly number: number;
+  readonly title: string;
+  readonly opensAt: Date | null;
+  /** Amounts its text speaks of, which tell the bands it weaves. */
+  readonly amountKeys: readonly string[];
+}
+
+export interface ClassStudent {
+  readonly name: string;
+  readonly seriesId: number;
+  readonly startedAt: Date;
+  readonly source: 'bought' | 'gift' | 'granted';
+  /** Place of the part in hand, from 0; undefined when all parts are done. */
+  readonly at: number | undefined;
+  readonly done: number;
+  readonly verdict: Verdict | null;
+  readonly lastStepAt: Date;
+}
+
+export interface ClassSeries {
+  readonly id: number;
+  readonly slug: string;
+  readonly title: string;
+  readonly state: 'draft' | 'published';
+  readonly publishedAt: Date | null;
+  readonly priceMinor: number | null;
+  readonly currency: string;
+  readonly workroomId: number;
+  readonly piece: Piece | null;
+  /** Those students can read; a draft has all it holds. */
+  readonly parts: readonly ClassPart[];
+  readonly students: readonly ClassStudent[];
+}
+
+type SeriesRow = Omit<ClassSeries, 'parts' | 'students'>;
+interface PartRow {
+  readonly id: number; readonly publicId: string; readonly seriesId: number; readonly title: string; readonly opensAt: Date | null;
+  readonly isPublished: number; readonly amountKeys: string[] | null; readonly steps: number | null;
+}
+interface SeatRow {
+  readonly id: number; readonly seriesId: number; readonly name: string; readonly startedAt: Date; readonly source: ClassStudent['source'];
+  readonly tickedAt: Date | null; readonly shownAt: Date | null; readonly finishedAt: Date | null;
+}
+interface MarkRow { readonly enrolmentId: number; readonly lessonId: number; readonly isFinished: number; readonly verdict: Verdict | null }
+interface TickRow { readonly enrolmentId: number; readonly part: string; readonly ticked: number }
+
+const SERIES = `
+  SELECT s.id, s.slug, s.title, s.state, s.published_at AS publishedAt, s.price_minor AS priceMinor, s.currency, s.workroom_id AS workroomId, p.data AS piece
+    FROM series s LEFT JOIN pieces p ON p.series_id = s.id
+   WHERE s.workroom_id IN (:workrooms)
+   ORDER BY s.state = 'published' DESC, s.published_at DESC, s.id DESC`;
+
+const PARTS = `
+  SELECT l.id, l.public_id AS publicId, l.series_id AS seriesId, l.title, l.opens_at AS opensAt, v.id IS NOT NULL AS isPublished,
+         JSON_EXTRACT(v.facts, '$.amounts') AS amountKeys, JSON_LENGTH(v.facts, '$.steps') AS steps
+    FROM lessons l JOIN series s ON s.id = l.series_id LEFT JOIN lesson_versions v ON v.id = l.published_version_id
+   WHERE s.workroom_id IN (:workrooms) AND l.taken_out_at IS NULL
+   ORDER BY l.series_id, l.position, l.id`;
+
+const SEATS = `
+  SELECT e.id, e.series_id AS seriesId, u.name, e.started_at AS startedAt, e.source,
+         (SELECT MAX(t.changed_at) FROM ticks t WHERE t.enrolment_id = e.id) AS tickedAt,
+         (SELECT MAX(p.created_at) FROM progress_photos p WHERE p.enrolment_id = e.id) AS shownAt,
+         (SELECT MAX(v.finished_at) FROM lesson_visits v WHERE v.enrolment_id = e.id) AS finishedAt
+    FROM enrolments e JOIN series s ON s.id = e.series_id JOIN users u ON u.id = e.user_id
+   WHERE s.workroom_id IN (:workrooms) AND e.state = 'active'
+   ORDER BY e.started_at DESC, e.id DESC`;
+
+/** Parts that were finished or shown, with the verdict on the newest photo. */
+const MARKS = `
+  SELECT m.enrolmentId, m.lessonId, MAX(m.isFinished) AS isFinished, MAX(m.verdict) AS verdict
+    FROM (SELECT v.enrolment_id AS enrolmentId, v.lesson_id AS lessonId, v.finished_at IS NOT NULL AS isFinished, NULL AS verdict FROM lesson_visits v
+          UNION ALL
+          SELECT p.enrolment_id, p.lesson_id, 0, p.verdict
+            FROM progress_photos p
+           WHERE NOT EXISTS (SELECT 1 FROM progress_photos n WHERE n.enrolment_id = p.enrolment_id AND n.lesson_id = p.lesson_id AND (n.created_at, n.id) > (p.created_at, p.id))) m
+    JOIN enrolments e ON e.id = m.enrolmentId AND e.state = 'active'
+    JOIN series s ON s.id = e.series_id
+   WHERE s.workroom_id IN (:workrooms)
+   GROUP BY m.enrolmentId, m.lessonId`;
+
+/** A step's key begins with the public id of its part. */
+const TICKS = `
+  SELECT t.enrolment_id AS enrolmentId, SUBSTRING_INDEX(t.item_key, ':', 1) AS part, COUNT(*) AS ticked
+    FROM ticks t JOIN enrolments e ON e.id = t.enrolment_id AND e.state = 'active' JOIN series s ON s.id = e.series_id
+   WHERE s.workroom_id IN (:workrooms) AND t.subject = 'step' AND t.is_ticked = 1
+   GROUP BY t.enrolment_id, part`;
+
+export async function classOf(workrooms: readonly number[]): Promise<ClassSeries[]> {
+  if (workrooms.length === 0) return [];
+  const asked = { replacements: { workrooms: [...workrooms] }, type: QueryTypes.SELECT } as const;
+  const [series, parts, seats, marks, ticks] = await Promise.all([
+    sequelize.query<SeriesRow>(SERIES, asked),
+    sequelize.query<PartRow>(PARTS, asked),
+    sequelize.query<SeatRow>(SEATS, asked),
+    sequelize.query<MarkRow>(MARKS, asked),
+    sequelize.query<TickRow>(TICKS, asked),
+  ]);
+  const markOf = new Map(marks.map((mark) => [`${mark.enrolmentId}:${mark.lessonId}`, mark]));
+  const tickedOf = new Map(ticks.map(({ enrolmentId, part, ticked }) => [`${enrolmentId}:${part}`, ticked]));
+  return series.map((one) => {
+    const own = parts.filter(({ seriesId }) => seriesId === one.id);
+    const shown = one.state === 'published' ? own.filter(({ isPublished }) => isPublished === 1) : own;
+    const partOf = (seat: SeatRow, part: PartRow): PartOfOne => {
+      const mark = markOf.get(`${seat.id}:${part.id}`);
+      return { isFinished: mark?.isFinished === 1, verdict: mark?.verdict ?? null, steps: part.steps ?? 0, ticked: tickedOf.get(`${seat.id}:${part.publicId}`) ?? 0 };
+    };
+    return {
+      ...one,
+      parts: shown.map(({ title, opensAt, amountKeys }, index) => ({ number: index + 1, title, opensAt, amountKeys: amountKeys ?? [] })),
+      students: seats.filter(({ seriesId }) => seriesId === one.id).map((seat) => studentOf(seat, shown.map((part) => partOf(seat, part)))),
+    };
+  });
+}
+
+function studentOf({ name, seriesId, startedAt, source, tickedAt, shownAt, finishedAt }: SeatRow, parts: readonly PartOfOne[]): ClassStudent {
+  const steps = [startedAt, tickedAt, shownAt, finishedAt].filter((moment): moment is Date => moment !== null);
+  return { name, seriesId, startedAt, source, ...classPlace(parts), lastStepAt: new Date(Math.max(...steps.map((moment) => moment.getTime()))) };
+}
