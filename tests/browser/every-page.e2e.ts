@@ -11,6 +11,8 @@ import { expectFaultless, test } from './support/test.ts';
 
 type Address = string | ((places: DemoPlaces) => string);
 
+const ofPart = (page: string) => ({ workroomPart }: DemoPlaces): string => `/workroom/series/low-tide/parts/${workroomPart}${page}`;
+
 /** By whom each page is looked at: by those for whom it is fullest. */
 const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visitor', at: Address])[]>> = {
   '/': [['visitor', '/']],
@@ -37,6 +39,19 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/sign-in': [['visitor', '/sign-in']],
   '/sign-up': [['visitor', '/sign-up']],
   '/teachers/[handle]': [['visitor', '/teachers/saltmarsh']],
+  '/series/[slug]/[part]/loomside': [['maud', '/series/low-tide/2/loomside'], ['visitor', '/series/low-tide/1/loomside']],
+  '/series/[slug]/piece': [['maud', '/series/low-tide/piece']],
+  '/workroom': [['ilse', '/workroom'], ['wren', '/workroom'], ['teodor', '/workroom']],
+  '/workroom/money': [['ilse', '/workroom/money']],
+  '/workroom/series/new': [['ilse', '/workroom/series/new']],
+  '/workroom/series/[slug]': [['ilse', '/workroom/series/low-tide'], ['teodor', '/workroom/series/three-knotted-cords']],
+  '/workroom/series/[slug]/piece': [['ilse', '/workroom/series/low-tide/piece'], ['teodor', '/workroom/series/three-knotted-cords/piece']],
+  '/workroom/series/[slug]/parts/[part]': [['ilse', ofPart('')]],
+  '/workroom/series/[slug]/parts/[part]/gather': [['ilse', ofPart('/gather')]],
+  '/workroom/series/[slug]/parts/[part]/preview': [['ilse', ofPart('/preview')]],
+  '/workroom/series/[slug]/parts/[part]/settings': [['ilse', ofPart('/settings')]],
+  '/workroom/series/[slug]/parts/[part]/versions': [['ilse', ofPart('/versions')]],
+  '/workroom/students': [['ilse', '/workroom/students']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
 };
 

@@ -21,20 +21,28 @@ interface Line {
 
 const EVERYBODY = '200';
 const SIGNED_IN = '303 200 200 200 200 200 200';
+/** Who is in already is sent on. */
+const AT_THE_DOOR = '200 303 303 303 303 303 303';
+const TEACHERS = '303 403 403 200 200 403 403';
+/** Another teacher finds nothing at the address of somebody else's series. */
+const OWNER = '303 403 403 404 200 403 403';
+const SEAT = '303 303 200 303 303 303 303';
 const BENCH = '303 403 403 200 200 200 403';
 const STEWARD = '303 404 404 404 404 404 200';
+
+const ofPart = (page: string) => ({ workroomPart }: DemoPlaces): string => `/workroom/series/low-tide/parts/${workroomPart}${page}`;
 
 const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/': [{ at: '/', answers: EVERYBODY }],
   '/404': [{ at: '/404', answers: '404' }],
-  '/500': [{ at: '/500', answers: '500' }],
+  '/500': [{ at: '/500', answers: '404' }],
   '/account': [{ at: '/account', answers: SIGNED_IN }],
   '/api/payments/events': [{ at: '/api/payments/events', post: true, answers: '400' }],
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
   '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
   '/api/ticks': [{ at: '/api/ticks', post: true, answers: '401 422 422 422 422 422 422' }],
-  '/confirm/[token]': [{ at: '/confirm/nothing', answers: '404' }],
+  '/confirm/[token]': [{ at: '/confirm/nothing', answers: '410' }],
   '/forgotten': [{ at: '/forgotten', answers: EVERYBODY }],
   '/handbook': [{ at: '/handbook', answers: EVERYBODY }],
   '/handbook/[...slug]': [{ at: '/handbook/tabby', answers: EVERYBODY }, { at: '/handbook/nothing', answers: '404' }],
@@ -47,7 +55,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
     { at: ({ photo }) => `/media/${photo}/original`, answers: '404' },
     { at: `/media/${'0'.repeat(26)}/large`, answers: '404' },
   ],
-  '/new-password/[token]': [{ at: '/new-password/nothing', answers: '404' }],
+  '/new-password/[token]': [{ at: '/new-password/nothing', answers: '410' }],
   '/office': [{ at: '/office', answers: STEWARD }],
   '/office/jobs': [{ at: '/office/jobs', answers: STEWARD }],
   '/office/log': [{ at: '/office/log', answers: STEWARD }],
@@ -66,17 +74,32 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/series/[slug]/[part]': [
     { at: '/series/low-tide/1', answers: EVERYBODY },
     { at: '/series/low-tide/2', answers: '402 402 200 402 200 200 402' },
-    { at: '/series/low-tide/3', answers: '402 402 403 402 200 200 402' },
+    { at: '/series/low-tide/3', answers: '402 402 200 402 200 200 402' },
     { at: '/series/low-tide/8', answers: '404' },
     { at: '/series/three-knotted-cords/1', answers: '404 404 404 200 404 404 404' },
   ],
+  '/series/[slug]/[part]/loomside': [{ at: '/series/low-tide/1/loomside', answers: EVERYBODY }, { at: '/series/low-tide/2/loomside', answers: '402 402 200 402 200 200 402' }],
   '/series/[slug]/gather': [{ at: '/series/low-tide/gather', answers: EVERYBODY }],
-  '/series/[slug]/seat': [{ at: '/series/low-tide/seat', answers: SIGNED_IN }],
-  '/sign-in': [{ at: '/sign-in', answers: EVERYBODY }],
-  '/sign-out': [{ at: '/sign-out', answers: '404' }],
-  '/sign-up': [{ at: '/sign-up', answers: EVERYBODY }],
+  '/series/[slug]/piece': [{ at: '/series/low-tide/piece', answers: SEAT }],
+  '/series/[slug]/seat': [{ at: '/series/low-tide/seat', answers: SEAT }],
+  '/sign-in': [{ at: '/sign-in', answers: AT_THE_DOOR }],
+  '/sign-out': [{ at: '/sign-out', answers: '303' }],
+  '/sign-up': [{ at: '/sign-up', answers: AT_THE_DOOR }],
   '/teachers/[handle]': [{ at: '/teachers/saltmarsh', answers: EVERYBODY }, { at: '/teachers/nobody', answers: '404' }],
+  '/api/workroom/lesson-check': [{ at: '/api/workroom/lesson-check', post: true, answers: '401 403 403 422 422 403 403' }],
+  '/api/workroom/lesson-draft': [{ at: '/api/workroom/lesson-draft', post: true, answers: '401 403 403 422 422 403 403' }],
+  '/workroom': [{ at: '/workroom', answers: BENCH }],
   '/workroom/bench': [{ at: '/workroom/bench', answers: BENCH }],
+  '/workroom/money': [{ at: '/workroom/money', answers: TEACHERS }],
+  '/workroom/series/new': [{ at: '/workroom/series/new', answers: TEACHERS }],
+  '/workroom/series/[slug]': [{ at: '/workroom/series/low-tide', answers: OWNER }],
+  '/workroom/series/[slug]/piece': [{ at: '/workroom/series/low-tide/piece', answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]': [{ at: ofPart(''), answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]/gather': [{ at: ofPart('/gather'), answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]/preview': [{ at: ofPart('/preview'), answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]/settings': [{ at: ofPart('/settings'), answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]/versions': [{ at: ofPart('/versions'), answers: OWNER }],
+  '/workroom/students': [{ at: '/workroom/students', answers: TEACHERS }],
 };
 
 /** Astro's own doors: actions decide by themselves (their tests are with the use-cases), pictures of the build are public. */

@@ -61,8 +61,6 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/students': 'teacher',
   '/workroom': 'bench',
   '/workroom/bench': 'bench',
-  '/workroom/money': 'teacher',
-  '/workroom/students': 'teacher',
   '/workroom/series/new': 'teacher',
   '/workroom/series/[slug]': 'teacher',
   '/workroom/series/[slug]/piece': 'teacher',

@@ -10,6 +10,8 @@ export interface DemoPlaces {
   readonly gatedVideo: string;
   /** Public id of Part 2. */
   readonly secondPart: string;
+  /** Public id of a part of Low Tide, as its teacher's pages name it. */
+  readonly workroomPart: string;
   /** Public id of Maud, as the office names her. */
   readonly person: string;
 }
@@ -35,17 +37,19 @@ export function demoPlaces(): Promise<DemoPlaces> {
 }
 
 async function find(): Promise<DemoPlaces> {
-  const [bench, one, two, people] = await Promise.all([
+  const [bench, one, two, people, desk] = await Promise.all([
     pageAs('ilse', '/workroom/bench'),
     pageAs('ilse', '/series/low-tide/1'),
     pageAs('ilse', '/series/low-tide/2'),
     pageAs('pell', '/office/people?q=maud'),
+    pageAs('ilse', '/workroom/series/low-tide'),
   ]);
   return {
     photo: firstIn(bench, /\/media\/([0-9a-z]{26})\/large/, 'the photo'),
     freeVideo: firstIn(one, /\/media\/([0-9a-z]{26})\/video/, 'the film of Part 1'),
     gatedVideo: firstIn(two, /\/media\/([0-9a-z]{26})\/video/, 'the film of Part 2'),
     secondPart: firstIn(await pageAs('maud', '/series/low-tide/2'), /name="lesson" value="([0-9a-z]{26})"/, 'the id of Part 2'),
+    workroomPart: firstIn(desk, /\/workroom\/series\/low-tide\/parts\/([0-9a-z]{26})/, 'a part'),
     person: firstIn(people, /\/office\/people\/([0-9a-z]{26})/, 'Maud'),
   };
 }

@@ -22,6 +22,8 @@ const SUFFIX: Readonly<Record<Coding, string>> = { br: '.br', gzip: '.gz' };
 const HASHED_FOLDER = '/_astro/';
 /** Shown by the site with their own status, never asked for by name. */
 const ERROR_PAGES = new Set(['/404.html', '/500.html']);
+const ERROR_ADDRESSES = new Set(['/404', '/404/', '/500', '/500/']);
+const NOWHERE = '/not-a-page';
 const FOREVER = 'public, max-age=31536000, immutable';
 const BRIEFLY = 'public, max-age=3600';
 
@@ -30,6 +32,8 @@ export function staticFiles(folder: string): Handler {
   const root = path.resolve(folder);
   const files = listFiles(root);
   return (request, response, next) => {
+    // Asked for by name they are as absent as any other page; the site can only show them in place of another.
+    if (ERROR_ADDRESSES.has(pathOf(request))) request.url = NOWHERE;
     const file = request.method === 'GET' || request.method === 'HEAD' ? files.get(pathOf(request)) : undefined;
     if (file === undefined) next();
     else serve(request, response, root, file);
