@@ -1,0 +1,65 @@
+import { mkdtemp, readdir, rm, writeFile } from 'node:fs/promises';
+import { tmpdir } from 'node:os';
+import { join } from 'node:path';
+import sharp from 'sharp';
+import { afterEach, beforeEach, describe, expect, test } from 'vitest';
+import { DiskMediaStore } from '#server/media/store.ts';
+import { Media, ProgressPhoto } from '#server/models/index.ts';
+import { photoThread } from '#server/queries/photos/photo-thread.ts';
+import { postPhoto } from '#server/use-cases/photos/post-photo.ts';
+import { contextFor, contextOf, type TestContext } from '../../support/context.ts';
+import { buildUser } from '../../support/factories.ts';
+import { buildFollowed } from '../../support/followed.ts';
+import type { User } from '#server/models/index.ts';
+
+let folder = '';
+beforeEach(async () => { folder = await mkdtemp(join(tmpdir(), 'fellmark-post-')); });
+afterEach(() => rm(folder, { recursive: true }));
+
+const contextWithStore = (user: User): Promise<TestContext> => contextFor(user, { media: new DiskMediaStore(join(folder, 'uploads')) });
+async function upload(bytes?: Buffer): Promise<{ path: string; originalName: string; words: string }> {
+  const path = join(folder, 'upload');
+  await writeFile(path, bytes ?? (await sharp({ create: { width: 640, height: 480, channels: 3, background: '#7a8f99' } }).jpeg().toBuffer()));
+  return { path, originalName: 'warped-loom.jpg', words: 'Is the left edge slack?' };
+}
+const files = async (): Promise<string[]> => (await readdir(join(folder, 'uploads', 'photos'), { recursive: true }).catch(() => [])).filter((name) => name.endsWith('.webp'));
+
+describe('a progress photo', () => {
+  test('joins the thread and waits', async () => {
+    const { series, parts: [, second], student, seat } = await buildFollowed();
+    await postPhoto(await contextWithStore(student), { series: series.slug, lesson: second.publicId, ...(await upload()) });
+    expect(await photoThread(seat.id, second.id)).toMatchObject([{ words: 'Is the left edge slack?', verdict: 'waits', width: 640, height: 480 }]);
+    expect(await files()).toHaveLength(2);
+  });
+
+  test('is refused to a visitor, without a seat, and in a part that is not open', async () => {
+    const { series, parts: [, second, third], student } = await buildFollowed();
+    const photo = await upload();
+    await expect(postPhoto(contextOf(null), { series: series.slug, lesson: second.publicId, ...photo })).rejects.toMatchObject({ code: 'UNAUTHENTICATED' });
+    await expect(postPhoto(await contextWithStore(await buildUser()), { series: series.slug, lesson: second.publicId, ...photo })).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    await expect(postPhoto(await contextWithStore(student), { series: series.slug, lesson: third.publicId, ...photo })).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    expect(await files()).toEqual([]);
+  });
+
+  test('is refused where the part asks for none', async () => {
+    const { series, parts: [first], student } = await buildFollowed();
+    await expect(postPhoto(await contextWithStore(student), { series: series.slug, lesson: first.publicId, ...(await upload()) })).rejects.toMatchObject({ code: 'VALIDATION', says: 'This part asks for no photo.' });
+  });
+
+  test('that is none leaves neither a row nor a file', async () => {
+    const { series, parts: [, second], student } = await buildFollowed();
+    const hostile = await upload(Buffer.from('<svg xmlns="http://www.w3.org/2000/svg"><script>alert(1)</script></svg>'));
+    await expect(postPhoto(await contextWithStore(student), { series: series.slug, lesson: second.publicId, ...hostile })).rejects.toMatchObject({ code: 'UNSUPPORTED', says: expect.stringContaining('JPEG, PNG or WebP') });
+    expect([await ProgressPhoto.count(), await Media.count(), await files()]).toEqual([0, 0, []]);
+  });
+
+  test('the seventh that would wait is told to wait its turn, and leaves nothing behind', async () => {
+    const { series, parts: [, second], student } = await buildFollowed();
+    const ctx = await contextWithStore(student);
+    const post = async () => postPhoto(ctx, { series: series.slug, lesson: second.publicId, ...(await upload()) });
+    for (let number = 1; number <= 6; number += 1) await post();
+    await expect(post()).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('6 photos of yours wait already') });
+    expect(await ProgressPhoto.count()).toBe(6);
+    expect(await files()).toHaveLength(12);
+  });
+});
