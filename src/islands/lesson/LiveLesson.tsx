@@ -27,9 +27,14 @@ export function LiveLesson({ seat, series, lesson }: LiveLessonProps) {
       moveHere();
       queue.put({ id: `step ${step}`, body: { subject: 'step', series, lesson, item: step, ticked, changedAt: new Date().toISOString() } });
     };
+    // The queue tells of a refusal again and again; the tick is taken back once.
+    let takenBack: ReadonlySet<string> = new Set();
     const onQueue = (): void => {
       const { unsent, waits, refused } = queue.current();
-      for (const id of refused) if (id.startsWith('step ')) markStep(id.slice(5), !tickedNow(id.slice(5)));
+      const fresh = [...refused].filter((id) => id.startsWith('step ') && !takenBack.has(id)).map((id) => id.slice(5));
+      for (const step of fresh) markStep(step, !tickedNow(step));
+      takenBack = refused;
+      if (fresh.length > 0) moveHere();
       setWords(refused.size > 0 ? 'This step was not ticked: the part is not open to you any more. Load the page again.' : unsent.size > 0 && waits !== 'nothing' ? 'Kept on this device. It goes out when there is signal.' : '');
     };
     const stop = queue.subscribe(onQueue);

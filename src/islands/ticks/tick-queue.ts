@@ -60,16 +60,21 @@ export class TickQueue {
 
   /** Sends what waits, in order; one run at a time. */
   flush(): Promise<void> {
-    this.sending ??= this.sendAll().finally(() => { this.sending = null; });
+    this.sending ??= this.sendAll().then((allSent) => {
+      this.sending = null;
+      // A change may have come after the run had looked for the last time.
+      return allSent && this.changes.length > 0 ? this.flush() : undefined;
+    });
     return this.sending;
   }
 
-  private async sendAll(): Promise<void> {
+  /** False when the rest has to wait. */
+  private async sendAll(): Promise<boolean> {
     for (let change = this.changes[0]; change !== undefined; change = this.changes[0]) {
       const answer = await this.send(change);
       if (answer === 'later' || answer === 'signed-out') {
         this.tell({ waits: answer });
-        return;
+        return false;
       }
       // A change made while this one was on its way stays.
       const sent = change;
@@ -77,6 +82,7 @@ export class TickQueue {
       this.tell(answer === 'refused' ? { refused: new Set([...this.state.refused, change.id]) } : {});
     }
     this.tell({ waits: 'nothing' });
+    return true;
   }
 
   private keep(changes: readonly TickChange[]): void {

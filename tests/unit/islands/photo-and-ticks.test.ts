@@ -47,6 +47,16 @@ describe('ticks on their way', () => {
     expect(queue.kept().size).toBe(0);
   });
 
+  test('a change made just as a run ends is sent all the same', async () => {
+    const send = vi.fn((): Promise<SendAnswer> => Promise.resolve('taken'));
+    const queue = new TickQueue(storage(), send);
+    const first = queue.flush();
+    queue.put(change('needle'));
+    await first;
+    expect(send).toHaveBeenCalledTimes(1);
+    expect(queue.kept().size).toBe(0);
+  });
+
   test('what the server will never take is told, and does not hold up the rest', async () => {
     const queue = new TickQueue(storage(), ({ id }) => Promise.resolve(id === 'gone' ? 'refused' : 'taken'));
     queue.put(change('gone'));

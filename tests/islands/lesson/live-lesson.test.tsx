@@ -1,0 +1,61 @@
+// @vitest-environment jsdom
+import { cleanup, render, screen, waitFor } from '@testing-library/react';
+import { afterEach, beforeEach, expect, test, vi } from 'vitest';
+import { LiveLesson } from '#islands/lesson/LiveLesson.tsx';
+import { LoomSideKeys } from '#islands/lesson/LoomSideKeys.tsx';
+
+const row = (id: string, ticked: boolean): string => `
+  <li id="step-${id}" class="step${ticked ? ' done' : ''}"><form class="step-form" method="post">
+    <input type="hidden" name="item" value="${id}"><button class="step-box" name="ticked" value="${ticked ? 'no' : 'yes'}" aria-pressed="${String(ticked)}" aria-label="Done: ${id}"></button>
+  </form></li>`;
+let seat = 0;
+beforeEach(() => {
+  seat += 1;
+  localStorage.clear();
+  document.body.innerHTML = `<ol>${row('tie-on', true)}${row('wind', false)}${row('pluck', false)}</ol>`;
+});
+afterEach(() => { cleanup(); vi.unstubAllGlobals(); document.body.innerHTML = ''; });
+
+const draw = () => render(<LiveLesson seat={`s${String(seat)}`} series="low-tide" lesson="l" />);
+const here = (): (string | undefined)[] => [...document.querySelectorAll('.step.here')].map(({ id }) => id);
+
+test('a step answers at once, the fell moves on, and the server hears of it', async () => {
+  const fetched = vi.fn(() => Promise.resolve(new Response('{}')));
+  vi.stubGlobal('fetch', fetched);
+  draw();
+  expect(here()).toEqual(['step-wind']);
+  screen.getByRole('button', { name: 'Done: wind' }).click();
+  expect(screen.getByRole('button', { name: 'Done: wind', pressed: true })).toBeDefined();
+  expect(here()).toEqual(['step-pluck']);
+  await waitFor(() => { expect(fetched).toHaveBeenCalledTimes(1); });
+  const [, sent] = fetched.mock.calls[0] as unknown as [string, { body: string }];
+  expect(JSON.parse(sent.body)).toMatchObject({ subject: 'step', series: 'low-tide', lesson: 'l', item: 'wind', ticked: true });
+});
+
+test('a step ticked without signal is kept here and said', async () => {
+  vi.stubGlobal('fetch', vi.fn(() => Promise.reject(new TypeError('no signal'))));
+  draw();
+  screen.getByRole('button', { name: 'Done: wind' }).click();
+  await screen.findByText('Kept on this device. It goes out when there is signal.');
+});
+
+test('a tick the server will not have is taken back, and she is told', async () => {
+  vi.stubGlobal('fetch', vi.fn(() => Promise.resolve(new Response('{}', { status: 404 }))));
+  draw();
+  screen.getByRole('button', { name: 'Done: wind' }).click();
+  await screen.findByText(/was not ticked/);
+  expect(screen.getByRole('button', { name: 'Done: wind', pressed: false })).toBeDefined();
+});
+
+test('arrows and space turn the steps at the loom side, but space on a key presses that key', () => {
+  const assign = vi.fn();
+  vi.stubGlobal('location', { assign });
+  render(<><LoomSideKeys back="/back" next="/next" /><a href="#x">A key</a></>);
+  const press = (key: string, target: Element = document.body) => { target.dispatchEvent(new KeyboardEvent('keydown', { key, bubbles: true, cancelable: true })); };
+  press(' ');
+  press('ArrowLeft');
+  press('ArrowRight');
+  press(' ', screen.getByText('A key'));
+  press('x');
+  expect(assign.mock.calls).toEqual([['/next'], ['/back'], ['/next']]);
+});

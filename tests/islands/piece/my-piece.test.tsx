@@ -1,0 +1,59 @@
+// @vitest-environment jsdom
+import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import userEvent from '@testing-library/user-event';
+import { renderToString } from 'react-dom/server';
+import { afterEach, describe, expect, test } from 'vitest';
+import { typeMine } from '#core/craft/my-piece/typed-mine.ts';
+import { MyPiece, type MyPieceProps } from '#islands/piece/MyPiece.tsx';
+import { lowTide } from '../../support/low-tide.ts';
+
+const pattern = await lowTide();
+/** The whole text at once: each change draws the cloth anew. */
+const type = (name: RegExp | string, text: string): void => { fireEvent.change(screen.getByRole('textbox', { name }), { target: { value: text } }); };
+const props: MyPieceProps = { slug: 'low-tide', name: 'Low Tide', teacher: 'Ilse', pattern, typed: typeMine({}, pattern, 'cm'), revision: 3, errors: {}, action: '?save' };
+afterEach(cleanup);
+
+describe('my piece', () => {
+  test('follows the hand: ends, figures and the picture change as she types', () => {
+    render(<MyPiece {...props} />);
+    expect(screen.queryByText(/^pattern 82/)).toBeNull();
+    type('Width of your piece', '30,5');
+    expect(screen.getByText('pattern 82 ends')).toBeDefined();
+    expect(screen.getByText(/The piece is .* wide instead of/)).toBeDefined();
+  });
+
+  test('an impossible loom is told at its field and in the status, with what works', () => {
+    render(<MyPiece {...props} />);
+    const field = screen.getByRole('textbox', { name: 'Inside width' });
+    type('Inside width', '3 mm');
+    expect(field.getAttribute('aria-invalid')).toBe('true');
+    const described = (field.getAttribute('aria-describedby') ?? '').split(' ').map((id) => document.getElementById(id)?.textContent ?? '').join(' ');
+    expect(described).toContain('Too narrow for a frame.');
+    expect(screen.getByRole('status').textContent).toBe('One thing does not work yet');
+  });
+
+  test('a loom that is too narrow offers the width that fits, and takes it in one press', async () => {
+    render(<MyPiece {...props} />);
+    type('Inside width', '30');
+    await userEvent.click(screen.getByRole('button', { name: 'Make it so' }));
+    expect(screen.getByRole('status').textContent).toBe('It fits your loom');
+  });
+
+  test('her own yarn changes how much is needed', async () => {
+    render(<MyPiece {...props} />);
+    await userEvent.click(screen.getByText(/\(water\)/));
+    const way = screen.getAllByRole('combobox', { name: 'How thick, by' }).find((one) => one.getAttribute('name') === 'yarns.water.by');
+    if (way === undefined) throw new Error('no way to say how thick');
+    await userEvent.selectOptions(way, 'metresPer100g');
+    type(/^Metres in 100 g/, '150');
+    expect(screen.getByText('Your own yarn is the water yarn.')).toBeDefined();
+  });
+
+  test('without script every field can be filled in, and what the server said stands at its field', () => {
+    const markup = renderToString(<MyPiece {...props} errors={{ insideWidthMm: 'Too wide for a frame.' }} />);
+    for (const name of ['series', 'revision', 'shown', 'units', 'insideWidthMm', 'widthMm', 'yarns.shore.grist', 'yarns.ridge.strands']) expect(markup).toContain(`name="${name}"`);
+    expect(markup).toContain('Too wide for a frame.');
+    expect(markup).toContain('action="?save"');
+    expect(markup).not.toContain(' style=');
+  });
+});
