@@ -78,7 +78,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
     { at: '/series/low-tide/8', answers: '404' },
     { at: '/series/three-knotted-cords/1', answers: '404 404 404 200 404 404 404' },
   ],
-  '/series/[slug]/[part]/loomside': [{ at: '/series/low-tide/1/loomside', answers: EVERYBODY }, { at: '/series/low-tide/2/loomside', answers: '402 402 200 402 200 200 402' }],
+  '/series/[slug]/[part]/loomside': [{ at: '/series/low-tide/1/loomside', answers: EVERYBODY }, { at: '/series/low-tide/2/loomside', answers: '303 303 200 303 200 200 303' }],
   '/series/[slug]/gather': [{ at: '/series/low-tide/gather', answers: EVERYBODY }],
   '/series/[slug]/piece': [{ at: '/series/low-tide/piece', answers: SEAT }],
   '/series/[slug]/seat': [{ at: '/series/low-tide/seat', answers: SEAT }],
