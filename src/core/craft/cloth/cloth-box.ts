@@ -1,5 +1,6 @@
 /** Where the woven part of a drawn piece lies in its picture, for rulers and marks beside it. */
 import { wovenHeightMm, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { layOnLoom } from '#core/craft/cloth/lay-on-loom.ts';
 
 export interface ClothBox {
   /** Pixels of the picture; `top` is the upper edge of the cloth when all of it is woven. */
@@ -11,22 +12,21 @@ export interface ClothBox {
   readonly begin: 'head' | 'foot';
 }
 
-/** Of a piece that hangs from its dowel, in a picture so many pixels wide. */
-export function hangingBox(piece: WovenPiece, width: number): ClothBox {
+/** Bare warp between the dowel's loops and the last row. */
+const WARP_ABOVE_PX = 3;
+
+/** Of a piece that hangs from its dowel, in a picture so many pixels wide. `dowelTop` is where the warp begins. */
+export function hangingBox(piece: WovenPiece, width: number): ClothBox & { readonly dowelTop: number } {
   const left = Math.max(6, width * 0.03);
+  const dowelTop = Math.max(16, width * 0.13);
   const pxPerMm = (width - 2 * left) / piece.widthMm;
-  return { left, top: Math.max(16, width * 0.13) + 3, height: wovenHeightMm(piece) * pxPerMm, pxPerMm, begin: piece.turned ? 'head' : 'foot' };
+  return { left, dowelTop, top: dowelTop + WARP_ABOVE_PX, height: wovenHeightMm(piece) * pxPerMm, pxPerMm, begin: piece.turned ? 'head' : 'foot' };
 }
 
 /** Of a piece in its frame. */
 export function loomBox(piece: WovenPiece, width: number): ClothBox {
-  const rail = width * 0.05;
-  const { loom } = piece;
-  const pxPerMm = loom === undefined ? (width * 0.83) / piece.widthMm : (width - 2 * rail) / loom.insideWidthMm;
-  const height = wovenHeightMm(piece) * pxPerMm;
-  const below = (loom?.bottomMm ?? 30) * pxPerMm;
-  const span = loom === undefined ? height * 1.32 + below : Math.max(loom.insideHeightMm * pxPerMm, height + below * 1.5);
-  return { left: (width - piece.widthMm * pxPerMm) / 2, top: rail * 0.7 + span - below - height, height, pxPerMm, begin: 'foot' };
+  const { inset, pxPerMm, nailsBottom, below, clothHeight } = layOnLoom(piece, width);
+  return { left: inset, top: nailsBottom - below - clothHeight, height: clothHeight, pxPerMm, begin: 'foot' };
 }
 
 export interface BandPlace {

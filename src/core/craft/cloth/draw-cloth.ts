@@ -7,6 +7,7 @@
 import { coloursOf } from '#core/craft/cloth/bands/draw-band.ts';
 import { ryaFall } from '#core/craft/cloth/bands/rya.ts';
 import { chanceFrom } from '#core/craft/cloth/chance.ts';
+import { hangingBox } from '#core/craft/cloth/cloth-box.ts';
 import { wovenHeightMm, type ClothPiece, type CordPiece, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { checkView, detailOf, type ClothView } from '#core/craft/cloth/cloth-view.ts';
 import { drawCords } from '#core/craft/cloth/cords.ts';
@@ -97,11 +98,9 @@ function defsOf(piece: WovenPiece, weave: Weave, clip: string): string {
 }
 
 function hang(piece: WovenPiece, view: ClothView): Picture {
-  const inset = Math.max(6, view.width * 0.03);
+  const { left: inset, top: at, dowelTop: top } = hangingBox(piece, view.width);
   const weave = weaveOf(piece, view, view.width - 2 * inset);
-  const top = Math.max(16, view.width * 0.13);
   const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
-  const at = top + 3;
   const bare = wovenShare(view) >= 1 && !endsInPile(piece, weave);
   const below = bare ? warpFringeHeight(weave) : pileBelow(piece, bands, weave);
   const fringe = bare ? `<g transform="translate(${num(inset)} ${num(at + bands.height)})">${drawWarpFringe(weave)}</g>` : '';

@@ -1,0 +1,124 @@
+import { readFileSync } from 'node:fs';
+import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { renderToString } from 'react-dom/server';
+import { afterEach, describe, expect, test } from 'vitest';
+import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
+import { emptyForm, typePiece } from '#core/craft/piece-form/type-piece.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import { PieceForm, type PieceFormProps } from '#islands/piece-form/PieceForm.tsx';
+import { pieceFormAfter, pieceFormBegins, placeOfField, placeWord, toldNow, type PieceFormEvent, type PieceFormState } from '#islands/piece-form/piece-form-state.ts';
+
+const lowTide = JSON.parse(readFileSync('content/series/low-tide/piece.json', 'utf8')) as Piece;
+const typed = typePiece(lowTide, 'cm');
+const after = (...events: PieceFormEvent[]): PieceFormState => events.reduce(pieceFormAfter, pieceFormBegins(typed, false, false));
+
+afterEach(cleanup);
+
+describe('the state of the form', () => {
+  test('what is typed counts as not saved', () => {
+    const state = after({ kind: 'type', field: 'size.widthMm', text: '42' });
+    expect([state.typed.texts['size.widthMm'], state.isChanged]).toEqual(['42', true]);
+  });
+
+  test('a row taken out can be put back, with everything that stood there', () => {
+    const out = after({ kind: 'act', act: { do: 'take-out-band', band: 6 } });
+    expect(out.typed.bands).toHaveLength(13);
+    expect(pieceFormAfter(out, { kind: 'put-back' }).typed).toEqual(typed);
+    expect(pieceFormAfter(pieceFormAfter(out, { kind: 'put-back' }), { kind: 'put-back' }).typed).toEqual(typed);
+  });
+
+  test('a move is told in words, and the first band cannot go before itself', () => {
+    expect(after({ kind: 'act', act: { do: 'sooner', band: 3 } }).news).toBe('Band 4 is now woven third.');
+    expect(after({ kind: 'act', act: { do: 'later', band: 13 } }).news).toBe('');
+    expect([0, 9, 10].map(placeWord)).toEqual(['first', 'tenth', 'number 11']);
+  });
+
+  test('a row that comes in takes the hands', () => {
+    expect(after({ kind: 'act', act: { do: 'add-band', after: 2 } }).fresh).toBe('bands.3.technique');
+    expect(after({ kind: 'act', act: { do: 'add-shape', band: 6 } }).fresh).toBe('bands.6.shapes.3.shape');
+  });
+
+  test('an empty field is no fault before saving was tried, nor a half typed length while it is typed', () => {
+    const empty = pieceFormBegins(emptyForm('cm'), false, false);
+    expect(toldNow(empty, judgeTyped(empty.typed))).toEqual([]);
+    expect(toldNow(pieceFormAfter(empty, { kind: 'try' }), judgeTyped(empty.typed)).length).toBeGreaterThan(3);
+    const half = after({ kind: 'enter', field: 'size.widthMm' }, { kind: 'type', field: 'size.widthMm', text: '12 1/' });
+    expect(toldNow(half, judgeTyped(half.typed))).toEqual([]);
+    const left = pieceFormAfter(half, { kind: 'leave', field: 'size.widthMm' });
+    expect(toldNow(left, judgeTyped(left.typed)).map(({ field }) => field)).toEqual(['size.widthMm']);
+  });
+
+  test.each([['bands.2.heightMm', 'Band 3'], ['bands.6.shapes.1.baseMm', 'Band 7, shape 2'], ['yarns.1.grist', 'Yarn water'], ['warp.yarn.grist', 'Warp yarn'], ['size.widthMm', ''], ['bands', 'Bands']])('%s stands at “%s”', (field, place) => {
+    expect(placeOfField(field, typed)).toBe(place);
+  });
+});
+
+/** Small, so that looking for things in it is quick. */
+const small: Piece = {
+  craft: 'frame-loom', size: { widthMm: 300, heightMm: 400 }, loom: { nailPitchMm: 10, warping: 'zigzag', insideHeightMm: 520, insideWidthMm: 400 }, warp: { yarn: { tex: 400 }, parity: 'even' },
+  beat: { picksPerWeftDiameter: 0.7 }, yarns: { ground: { metresPer100g: 180 } },
+  bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 60 }, { technique: 'tabby', name: 'sky', yarn: 'ground', fill: true }],
+};
+const props: PieceFormProps = { action: '?_action=x', series: { slug: 'low-tide', name: 'Low Tide' }, revision: 3, typed: typePiece(small, 'cm'), isTried: false, isChanged: false, summary: '', openBand: null, saved: { words: 'Saved today 14:02' } };
+
+const open = (): void => { render(<PieceForm {...props} />); };
+
+function element<E extends Element>(selector: string, kind: abstract new () => E): E {
+  const found = document.querySelector(selector);
+  if (!(found instanceof kind)) throw new RangeError(`no ${selector}`);
+  return found;
+}
+
+const field = (name: string): HTMLInputElement => element(`[name="${name}"]`, HTMLInputElement);
+const button = (value: string): HTMLButtonElement => element(`button[name="do"][value="${value}"]`, HTMLButtonElement);
+const ends = (): string => [...document.querySelectorAll('.plan-table tr')].find((line) => line.textContent.startsWith('Warp ends'))?.textContent ?? '';
+
+const retype = (name: string, text: string): void => { fireEvent.change(field(name), { target: { value: text } }); };
+
+describe('the form on the page', () => {
+  test('numbers follow what is typed', () => {
+    open();
+    expect(ends()).toBe('Warp ends62\u00a0ends');
+    retype('size.widthMm', '31,5');
+    expect(ends()).toBe('Warp ends64\u00a0ends');
+    expect(screen.getByText('Not saved yet')).toBeTruthy();
+  });
+
+  test('what cannot be woven is said at its field, the picture stays, and nothing is sent', () => {
+    open();
+    let sent = 0;
+    // Above React's own listener, so that what it prevents is known here.
+    document.addEventListener('submit', (event) => { if (!event.defaultPrevented) sent += 1; }, { once: true });
+    retype('loom.insideWidthMm', '20');
+    expect(field('loom.insideWidthMm').getAttribute('aria-invalid')).toBe('true');
+    expect(screen.getByText(/Drawn as it was before/)).toBeTruthy();
+    fireEvent.click(button('save'));
+    expect(element('#piece-errors', HTMLDivElement).textContent).toContain('Nothing typed is lost');
+    expect(sent).toBe(0);
+  });
+
+  test('a band taken out comes back by the toast', () => {
+    open();
+    fireEvent.click(button('take-out-band:0'));
+    expect(document.querySelectorAll('.bands > li')).toHaveLength(1);
+    fireEvent.click(screen.getByText('Put it back'));
+    expect(document.querySelectorAll('.bands > li')).toHaveLength(2);
+    expect(field('bands.0.heightMm').value).toBe('6');
+  });
+
+  test('a new band is open, and the hands are in it', () => {
+    open();
+    fireEvent.click(button('add-band:1'));
+    expect(document.activeElement?.getAttribute('name')).toBe('bands.2.technique');
+    expect(document.activeElement?.closest('details')?.hasAttribute('open')).toBe(true);
+  });
+
+  test('without script it holds every field, each of its buttons sends it, and the first of them saves', () => {
+    const page = new DOMParser().parseFromString(renderToString(<PieceForm {...props} typed={typed} />), 'text/html');
+    const names = [...page.querySelectorAll('input[name], select[name]')].map((one) => one.getAttribute('name'));
+    expect(names).toEqual(expect.arrayContaining(['series', 'revision', 'units', 'size.widthMm', 'warp.yarn.grist', 'yarns.5.id', 'bands.13.technique', 'bands.6.shapes.2.leanMm', 'allowances.drawIn']));
+    const buttons = [...page.querySelectorAll('button[name="do"]')].map((one) => one.getAttribute('value'));
+    expect(buttons[0]).toBe('save');
+    expect(buttons).toEqual(expect.arrayContaining(['add-band:13', 'copy-band:0', 'sooner:3', 'take-out-yarn:0', 'add-shape:6']));
+  });
+});
