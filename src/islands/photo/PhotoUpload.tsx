@@ -38,17 +38,18 @@ const showThread = (): void => { window.location.reload(); };
  */
 export function PhotoUpload({ series, lesson, part, teacher, answerWords, again, open, fault, words = '', start = startUppyUpload, onSent = showThread }: PhotoUploadProps) {
   const [live, setLive] = useState(false);
-  const [said, setSaid] = useState(words);
   useEffect(() => setLive(true), []);
   const { state, choose, send, stop, putAway } = useUpload(start, fault);
   const isSent = state.at === 'sent';
   useEffect(() => {
     if (isSent) onSent();
   }, [isSent, onSent]);
-  const onSubmit = (event: SyntheticEvent): void => {
+  const onSubmit = (event: SyntheticEvent<HTMLFormElement>): void => {
     if (!live) return;
     event.preventDefault();
-    if (state.at === 'chosen') send({ series, lesson, words: said });
+    // Read from the page, not from state: she may have written before the script was there.
+    const said = new FormData(event.currentTarget).get('words');
+    if (state.at === 'chosen') send({ series, lesson, words: typeof said === 'string' ? said : '' });
   };
   const faultNow = state.at === 'choosing' ? state.fault : undefined;
   const title = again ? 'Send another photo' : 'Send your photo';
@@ -60,7 +61,7 @@ export function PhotoUpload({ series, lesson, part, teacher, answerWords, again,
         <input type="hidden" name="lesson" value={lesson} />
         <input type="hidden" name="back" value={part} />
         {/* The words stand before the file: when the file is not taken, what came before it is kept. */}
-        <TextField name="words" form="photo" label={`What should ${teacher} know?`} optional rows={2} maxLength={1000} value={said} onChange={(event) => setSaid(event.currentTarget.value)} />
+        <TextField name="words" form="photo" label={`What should ${teacher} know?`} optional rows={2} maxLength={1000} defaultValue={words} />
         {live ? (
           <>
             {state.at === 'choosing' && <DropPhoto onPhoto={choose} />}
