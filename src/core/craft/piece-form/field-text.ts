@@ -38,16 +38,16 @@ export function fieldUnit(asked: Asked, units: Units): string | undefined {
 
 const MM_IN: Readonly<Partial<Record<LengthUnit, number>>> = { mm: 1, cm: 10, m: 1000 };
 
-/** `mm` ≥ 0, as short as it can be said exactly: in `unit` if it comes out even there, else with cm, m or mm behind it. */
+/** `mm` ≥ 0, as short as it can be said exactly: in `unit` if it comes out even there, else with a unit of its own behind it. */
 function lengthFieldText(mm: number, unit: LengthUnit): string {
   const says = (text: string): boolean => {
     const read = parseLength(text, unit);
     return read.ok && read.mm === mm;
   };
-  const plain = unit === 'in' ? inchesText(toInches(mm / MM_PER_INCH, 64, 'nearest')) : decimalText(mm / (MM_IN[unit] ?? 914.4));
-  if (says(plain)) return plain;
-  const own = unit === 'in' || unit === 'yd' ? `${decimalText(mm / 10)} cm` : '';
-  return says(own) ? own : `${String(mm)} mm`;
+  const inches = inchesText(toInches(mm / MM_PER_INCH, 64, 'nearest'));
+  const plain = unit === 'in' ? inches : decimalText(mm / (MM_IN[unit] ?? 914.4));
+  const ways = [plain, ...(unit === 'in' || unit === 'yd' ? [`${decimalText(mm / 10)} cm`] : [`${inches} in`])];
+  return ways.find(says) ?? `${String(mm)} mm`;
 }
 
 /** Without the tail of nines or noughts that a division leaves. */

@@ -50,6 +50,11 @@ describe('a piece in a form', () => {
     expect(bands[6]?.shapes[0]?.texts).toMatchObject({ shape: 'triangle', baseMm: '21', leanMm: '3.5' });
   });
 
+  test('says a size typed in inches in inches to who measures in centimetres', () => {
+    const piece = shipped(SHIPPED[0] ?? '');
+    expect(typePiece({ ...piece, size: { ...piece.size, widthMm: 12 * 25.4 } }, 'cm').texts['size.widthMm']).toBe('12 in');
+  });
+
   test('says a centimetre size in centimetres to who measures in inches, rather than round it', () => {
     const { texts } = typePiece(shipped(SHIPPED[0] ?? ''), 'in');
     expect(texts['size.widthMm']).toBe('40 cm');
