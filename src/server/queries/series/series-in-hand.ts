@@ -36,9 +36,11 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
       ...factsOfText(lesson.draftReading, media, isUnknown),
     };
   });
+  // Pieces of other crafts cannot be described yet; their teachers say amounts in words.
+  const isReckoned = series.craft === 'frame-loom';
   const { title, summary, story, techniques, priceMinor } = series;
   return {
-    inHand: { title, summary, story, techniques, priceMinor, pieceFits: plan === null ? null : plan.ok, parts },
+    inHand: { title, summary, story, techniques, priceMinor, pieceFits: isReckoned ? (plan?.ok ?? null) : true, parts },
     drafts: lessons.map((lesson) => ({ lesson, text: lesson.draftReading })),
   };
 }

@@ -1,0 +1,175 @@
+/** A teacher makes a series from nothing, puts it before students, and takes it back. */
+import { randomBytes } from 'node:crypto';
+import { expect, type Page } from 'playwright/test';
+import { stateOf } from './support/demo-people.ts';
+import { expectFaultless, test } from './support/test.ts';
+
+const newTitle = (): string => `Ebb ${randomBytes(3).toString('hex')}`;
+const inMain = (page: Page) => page.getByRole('main');
+const press = (page: Page, name: string | RegExp): Promise<void> => inMain(page).getByRole('button', { name, exact: true }).first().click();
+
+async function makeSeries(page: Page, title: string): Promise<string> {
+  await page.goto('/workroom/series/new');
+  await page.getByLabel('Title').fill(title);
+  await press(page, 'Make the series');
+  await expect(page.getByRole('heading', { level: 1, name: title })).toBeVisible();
+  return new URL(page.url()).pathname;
+}
+
+async function putInPart(page: Page, title: string): Promise<void> {
+  await page.getByLabel('Put in a part').fill(title);
+  await press(page, 'Put it in');
+  await expect(page.getByRole('heading', { level: 3, name: title })).toBeVisible();
+}
+
+async function writePart(page: Page, desk: string, title: string, words: string): Promise<void> {
+  await page.goto(desk);
+  await page.getByRole('link', { name: title, exact: true }).click();
+  await page.getByLabel('Text of this part').fill(words);
+  await press(page, 'Save');
+  await expect(inMain(page).getByText(/^Saved \d\d:\d\d$/).or(page.getByRole('status').filter({ hasText: /^Saved \d\d:\d\d$/ })).first()).toBeVisible();
+}
+
+const titles = (page: Page): Promise<string[]> => inMain(page).getByRole('list').filter({ has: page.locator('.part-row') }).getByRole('heading', { level: 3 }).allTextContents();
+
+for (const javaScriptEnabled of [true, false]) {
+  test.describe(javaScriptEnabled ? 'with script' : 'without script', () => {
+    test.use({ javaScriptEnabled, storageState: stateOf('ilse') });
+
+    test('a series comes from nothing to its students, and back', async ({ page, browser }) => {
+      test.setTimeout(150_000);
+      const title = newTitle();
+      const desk = await makeSeries(page, title);
+      await expect(inMain(page).getByText('The summary is missing. It is what people read first.')).toBeVisible();
+      await expect(inMain(page).getByRole('button', { name: 'Publish' })).toHaveAttribute('aria-disabled', 'true');
+
+      await putInPart(page, 'Weave the foot');
+      await putInPart(page, 'Dress the loom');
+      await inMain(page).getByRole('button', { name: 'Move Part 2, Dress the loom up' }).click();
+      await expect(page.getByText('“Dress the loom” is now Part 1.')).toBeVisible();
+      await expect.poll(() => titles(page)).toEqual(['Dress the loom', 'Weave the foot']);
+
+      // A mistake is kept, told with its line, and mended.
+      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\nWind {1+1} ends.');
+      await expect(inMain(page).getByRole('link', { name: 'Line 3' })).toBeVisible();
+      await expect(inMain(page).getByText(/Curly braces mean code/)).toBeVisible();
+      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\n<Step id="wind">Wind <Amount of="ends"/>.</Step>');
+      await expect(inMain(page).getByText('It can be read as it stands.')).toBeVisible();
+      if (javaScriptEnabled) await expectFaultless(page);
+
+      await page.getByRole('link', { name: 'Settings', exact: true }).click();
+      await page.getByLabel('Ask for a photo').check();
+      await page.getByLabel('What it shall show').fill('Show your warped loom');
+      await page.getByLabel('Free to read').check();
+      await press(page, 'Save');
+      await expect(page.getByText('asks for a photo').first()).toBeVisible();
+
+      await page.getByRole('link', { name: 'To gather', exact: true }).click();
+      await page.getByLabel('Name', { exact: true }).fill('Blunt needle');
+      await page.getByLabel('Or how much in words').fill('1');
+      await press(page, 'Put it on the list');
+      await expect(inMain(page).getByRole('listitem').filter({ hasText: 'Blunt needle' }).first()).toBeVisible();
+
+      await writePart(page, desk, 'Weave the foot', '<Step id="weave">Weave eight rows.</Step>');
+      await page.getByRole('link', { name: 'Settings', exact: true }).click();
+      await page.getByLabel('On a date, for everybody').check();
+      await page.getByLabel('Day and time').fill('2020-01-01T09:00');
+      await press(page, 'Save');
+      await expect(page.getByLabel('Day and time')).toHaveAccessibleDescription(/This moment has passed/);
+      await expect(page.getByLabel('Day and time')).toHaveValue('2020-01-01T09:00');
+      await page.getByLabel('Day and time').fill('');
+      await page.getByLabel('After you have seen a photo').check();
+      await page.getByLabel('It opens when you say weave on to the photo of').selectOption({ label: 'Part 1, Dress the loom' });
+      await press(page, 'Save');
+      await expect(page.getByText('opens after you say weave on to the photo of Part 1').first()).toBeVisible();
+
+      await page.goto(desk);
+      await page.getByLabel('Summary').fill('A small piece of evening sea.');
+      await page.getByLabel('Price of a seat').fill('dear');
+      await press(page, 'Save');
+      await expect(page.getByLabel('Price of a seat')).toHaveAccessibleDescription(/not a price in EUR/);
+      await expect(page.getByLabel('Summary')).toHaveValue('A small piece of evening sea.');
+      await page.getByLabel('Price of a seat').fill('42');
+      await press(page, 'Save');
+      await expect(page.getByLabel('Price of a seat')).toHaveValue('42.00');
+
+      await page.goto(`${desk}/piece`);
+      await press(page, /^(?:Save|Keep).*/);
+      await page.goto(desk);
+      await expect(inMain(page).getByText('Nothing stands in the way.')).toBeVisible();
+
+      await press(page, 'Publish');
+      await page.getByRole('dialog').getByRole('button', { name: 'Publish' }).click();
+      await expect(inMain(page).getByText(/Open to buyers since/)).toBeVisible();
+
+      const student = await browser.newContext({ storageState: stateOf('amara'), baseURL: new URL(page.url()).origin });
+      const shop = await student.newPage();
+      const address = desk.replace('/workroom', '');
+      await shop.goto(address);
+      await expect(shop.getByRole('heading', { level: 1, name: title })).toBeVisible();
+      await shop.goto(`${address}/1`);
+      await expect(shop.getByText(/Wind \d+/)).toBeVisible();
+
+      await press(page, 'Take back to draft');
+      await page.getByRole('dialog').getByRole('button', { name: 'Take back to draft' }).click();
+      await expect(inMain(page).getByText('Draft again: nobody new can buy it')).toBeVisible();
+      expect((await shop.goto(address))?.status()).toBe(404);
+      await student.close();
+    });
+
+    test('a part taken out is put back where it stood', async ({ page }) => {
+      await makeSeries(page, newTitle());
+      for (const title of ['One', 'Two', 'Three']) await putInPart(page, title);
+      await inMain(page).getByRole('button', { name: 'Take out Part 2, Two' }).click();
+      await expect(inMain(page).getByRole('heading', { name: 'Part 2 taken out' })).toBeVisible();
+      expect(await titles(page)).toEqual(['One', 'Three']);
+      await press(page, 'Put it back');
+      await expect(page.getByText('“Two” is back as Part 2.')).toBeVisible();
+      expect(await titles(page)).toEqual(['One', 'Two', 'Three']);
+    });
+
+    test('of two windows none writes over the other unasked', async ({ page, context }) => {
+      const desk = await makeSeries(page, newTitle());
+      await putInPart(page, 'One');
+      await page.getByRole('link', { name: 'One', exact: true }).click();
+      const other = await context.newPage();
+      await other.goto(page.url());
+      await writePart(other, desk, 'One', 'Theirs.');
+      await page.getByLabel('Text of this part').fill('Mine.');
+      await press(page, 'Save');
+      await expect(inMain(page).getByText('Another window saved this text in the meantime')).toBeVisible();
+      await expect(page.getByLabel('Text of this part')).toHaveValue('Mine.');
+      await press(page, 'Keep mine');
+      await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+      await page.reload();
+      await expect(page.getByLabel('Text of this part')).toHaveValue('Mine.');
+    });
+  });
+}
+
+test.describe('by keyboard alone', () => {
+  test.use({ storageState: stateOf('ilse') });
+
+  test('a part moves up step by step, and an amount is put in from the plan', async ({ page }) => {
+    await makeSeries(page, newTitle());
+    for (const title of ['One', 'Two', 'Three']) await putInPart(page, title);
+    await inMain(page).getByRole('button', { name: 'Move Part 3, Three up' }).focus();
+    for (const order of [['One', 'Three', 'Two'], ['Three', 'One', 'Two']]) {
+      await page.keyboard.press('Enter');
+      await expect.poll(() => titles(page)).toEqual(order);
+    }
+    await expect(page.locator(':focus')).toHaveAccessibleName('Part 1, Three is first already');
+
+    await page.goto('/workroom/series/low-tide');
+    await page.getByRole('link', { name: 'Off the loom', exact: true }).focus();
+    await page.keyboard.press('Enter');
+    await page.getByRole('combobox', { name: 'Amount from the plan' }).focus();
+    await page.keyboard.type('Hanging cord');
+    await page.keyboard.press('Enter');
+    await expect(page.getByLabel('Text of this part')).toBeFocused();
+    await expect(page.getByLabel('Text of this part')).toHaveValue(/<Amount of="cord"\/>/);
+    await page.keyboard.press('Control+z');
+    await page.keyboard.press('Control+s');
+    await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible();
+  });
+});
