@@ -5,8 +5,8 @@
 import axe from 'axe-core';
 import { expect, test as base, type Page } from 'playwright/test';
 
-/** A page that answers 404 or 422 on purpose is told of in the console as well. */
-const ANSWERED_ON_PURPOSE = /^Failed to load resource: the server responded with a status of (?:402|403|404|410|422|429)\b/;
+/** A page that answers with a refusal on purpose is told of in the console as well. */
+const ANSWERED_ON_PURPOSE = /^Failed to load resource: the server responded with a status of (?:402|403|404|409|410|422|429)\b/;
 
 export const test = base.extend({
   page: async ({ page }, use) => {
