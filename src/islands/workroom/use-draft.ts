@@ -40,6 +40,8 @@ export function useDraft(field: RefObject<HTMLTextAreaElement | null>, lesson: s
     const text = field.current;
     const onInput = () => change({ kind: 'typed' });
     text?.addEventListener('input', onInput);
+    // Typed before the script woke, or put back by the browser after going back and forth.
+    if (text !== null && text.value !== text.defaultValue) change({ kind: 'typed' });
     return () => text?.removeEventListener('input', onInput);
   }, [field]);
 
