@@ -1,5 +1,4 @@
 import { describe, expect, test } from 'vitest';
-import { sumUp } from '#core/money/month-sums.ts';
 import { classPlace, countByPart, daysSince, type PartOfOne } from '#core/workroom/class-place.ts';
 import { countWord, middleOf, waitedWords } from '#core/workroom/waited-words.ts';
 
@@ -38,13 +37,4 @@ test('small counts are words', () => {
 
 test.each([[[], undefined], [[5], 5], [[9, 1, 5], 5], [[1, 2, 10, 4], 3]])('the middle of %j is %s', (values, middle) => {
   expect(middleOf(values)).toBe(middle);
-});
-
-test('sums of a ledger stay within their currency, and what is yours is what came in less the fee', () => {
-  const row = (kind: 'sale' | 'fee' | 'refund' | 'fee-refund', amountMinor: number, currency = 'EUR', count = 1) => ({ kind, amountMinor, currency, count });
-  expect(sumUp([row('sale', 20_400, 'EUR', 3), row('fee', -1_632, 'EUR', 3), row('refund', -6_800), row('fee-refund', 544), row('sale', 7_500, 'USD'), row('fee', -600, 'USD')])).toEqual([
-    { currency: 'EUR', seats: 3, refunds: 1, salesMinor: 20_400, refundsMinor: -6_800, takenInMinor: 13_600, feeMinor: -1_088, yoursMinor: 12_512 },
-    { currency: 'USD', seats: 1, refunds: 0, salesMinor: 7_500, refundsMinor: 0, takenInMinor: 7_500, feeMinor: -600, yoursMinor: 6_900 },
-  ]);
-  expect(sumUp([])).toEqual([]);
 });
