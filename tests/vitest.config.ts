@@ -10,6 +10,9 @@ const shared = {
   /** A zone far from UTC with daylight saving, so that a mistaken local time shows. */
   env: { TZ: 'America/New_York' },
   maxWorkers: 2,
+  /** How long a test takes is a matter of benches; here only one that hangs may end by time. */
+  testTimeout: 60_000,
+  hookTimeout: 60_000,
 };
 /** These talk to the outside, stand at the door or run beside, and need no database. */
 const withoutDatabase = 'tests/server/{payments,stand-ins,mail,lesson-text,web/front,drawing,start}/**/*.test.ts';
@@ -19,7 +22,7 @@ export default defineConfig({
   test: {
     projects: [
       { test: { name: 'unit', ...shared, include: ['tests/unit/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' } },
-      { test: { name: 'islands', ...shared, include: ['tests/islands/**/*.test.{ts,tsx}'], environment: 'jsdom' } },
+      { test: { name: 'islands', ...shared, include: ['tests/islands/**/*.test.{ts,tsx}'], environment: 'jsdom', setupFiles: ['tests/support/islands-setup.ts'] } },
       {
         test: {
           name: 'server', ...shared, environment: 'node',
@@ -29,7 +32,7 @@ export default defineConfig({
           exclude: [withoutDatabase],
           globalSetup: ['tests/support/database-server.ts'],
           setupFiles: ['tests/support/server-setup.ts'],
-          pool: 'forks', isolate: true, testTimeout: 20_000, hookTimeout: 60_000,
+          pool: 'forks', isolate: true,
         },
       },
       { test: { name: 'edge', ...shared, include: [withoutDatabase], environment: 'node' } },

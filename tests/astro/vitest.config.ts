@@ -2,6 +2,6 @@
 import { getViteConfig } from 'astro/config';
 
 const root = new URL('../..', import.meta.url).pathname;
-const test = { name: 'astro', root, include: ['tests/astro/**/*.test.ts'], environment: 'node', env: { TZ: 'America/New_York' } };
+const test = { name: 'astro', root, include: ['tests/astro/**/*.test.ts'], environment: 'node', env: { TZ: 'America/New_York' }, testTimeout: 60_000, hookTimeout: 120_000 };
 
 export default getViteConfig({ test });

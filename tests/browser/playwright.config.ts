@@ -18,7 +18,9 @@ export default defineConfig({
   fullyParallel: true,
   forbidOnly: true,
   retries: 0,
-  timeout: 60_000,
+  timeout: 120_000,
+  // A busy machine may take a while to wake a page's script; what never comes still fails.
+  expect: { timeout: 15_000 },
   reporter: [['list'], ...(report === undefined ? [] : [['json', { outputFile: report }] as const])],
   use: {
     browserName: 'chromium',
