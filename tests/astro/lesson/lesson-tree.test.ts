@@ -72,7 +72,7 @@ describe('amounts', () => {
     const notes = page.querySelectorAll('[popover]');
     expect(notes).toHaveLength(1);
     expect(notes[0]?.id).toBe(buttons[0]?.getAttribute('popovertarget'));
-    expect(textOf(notes[0])).toContain('ends × loom heightEnds66');
+    expect(textOf(notes[0])).toContain('ends × loom height Ends66');
   });
 
   test('say so when the plan does not have them', async () => {
