@@ -15,13 +15,16 @@ import {
   texFromBall,
   texFromCount,
   texFromMetresPer100g,
+  texFromYardsPerOunce,
   texFromYardsPerPound,
+  twistContraction,
   texOfFolded,
   TEX_YARDS_PER_POUND,
   yardsPerPoundFromTex,
 } from '#core/craft/yarn/count.ts';
 import { readCount } from '#core/craft/yarn/count-text.ts';
 import { ashenhurstNumber, compressedDiameter, diameterFromVolume, volumeOfAshenhurst } from '#core/craft/yarn/diameter.ts';
+import { threadOf } from '#core/craft/yarn/thread.ts';
 import { diameterFromTwist } from '#core/craft/spinning/twist.ts';
 import { expectClose, expectPrinted } from './close.ts';
 
@@ -54,6 +57,9 @@ describe('converting counts', () => {
     ['200 m in 100 g is tex', texFromMetresPer100g(200), '500', 500, 'definition'],
     ['200 m in 100 g is Nm', countFromTex(500, 'nm'), '2', 2, 'definition'],
     ['200 m in 100 g is yards in a pound', yardsPerPoundFromTex(500), undefined, 992.1093, 'derived'],
+    ['spun silk 1 is cotton', from(1, 'spun-silk').to('ne-cotton'), '1', 1, 'both 840 yd in a pound, by definition'],
+    ['100 decitex is tex', texFromCount(100, 'dtex'), '10', 10, 'definition'],
+    ['a yard in an ounce is tex', texFromYardsPerOunce(1), undefined, 31003.41549, 'derived'],
   ])('%s', (_, actual, printed, exact) => {
     expectClose(actual, exact, 1e-7);
     if (printed !== undefined) expectPrinted(actual, printed);
@@ -99,6 +105,7 @@ describe('folded and plied yarn', () => {
   test('8/4 cotton sold as 1600 yards in a pound lost 4.762 % to twist (label in a rigid-heddle project book)', () => {
     const untwisted = readCount('8/4', 'ne-cotton')?.tex ?? 0;
     expectClose(1 - untwisted / texFromYardsPerPound(1600), 0.047619048, 1e-7);
+    expectClose(twistContraction([untwisted], texFromYardsPerPound(1600)), 0.047619048, 1e-7);
     expectClose(texOfFolded([untwisted], 0.0476190476), texFromYardsPerPound(1600), 1e-8);
   });
 
@@ -116,6 +123,24 @@ describe('folded and plied yarn', () => {
 
   test('a ball of 200 yards and 100 grams is its own tex (definition)', () => {
     expectClose(texFromBall({ metres: 200 * 0.9144, grams: 100 }), 1000 * 100 / (0.9144 * 200), 1e-15);
+  });
+});
+
+describe('weight classes', () => {
+  /** Number, tex, compressed at K 0.84 and loft of a yarn in the middle of its class. */
+  test.each([
+    [0, 142.9, 0.5131, 0.7257], [1, 210.5, 0.6229, 1.155], [2, 333.3, 0.7838, 1.693], [3, 444.4, 0.9051, 1.954],
+    [4, 625, 1.073, 2.419], [5, 869.6, 1.266, 3.387], [6, 1429, 1.623, 4.618], [7, 2500, 2.147, 10.16],
+  ] as const)('class %i in its middle is %f tex, %f mm beaten and %f mm lying free (Craft Yarn Council’s wraps; one shop’s metres, craftys.uk)', (number, tex, compressedMm, loftMm) => {
+    const thread = threadOf({ class: number }, 0.84);
+    expectPrinted(thread.tex, String(tex));
+    expectClose(thread.compressedMm, compressedMm, 5e-4);
+    expectClose(thread.loftMm, loftMm, 5e-4);
+  });
+
+  test('a soft yarn of 160 m in 100 g and 10.5 wraps is 2.254 times as thick free as beaten (derived)', () => {
+    const { compressedMm, loftMm } = threadOf({ metresPer100g: 160, wrapsPerInch: 10.5 }, 0.84);
+    expectClose(loftMm / compressedMm, 2.254, 2e-4);
   });
 });
 

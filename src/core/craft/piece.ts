@@ -9,11 +9,13 @@
 
 export type CountSystem =
   | 'ne-cotton'
+  | 'spun-silk'
   | 'ne-worsted'
   | 'nm'
   | 'lea'
   | 'run'
   | 'denier'
+  | 'dtex'
   | 'jute'
   | 'yorkshire'
   | 'grain';
@@ -24,11 +26,21 @@ export interface YarnCount {
   readonly system: CountSystem;
 }
 
+/** Shops' classes from 0, lace, to 7, jumbo (`yarn/classes.ts`). */
+export type YarnClassNumber = 0 | 1 | 2 | 3 | 4 | 5 | 6 | 7;
+
+interface GristWays {
+  readonly tex: number;
+  readonly metresPer100g: number;
+  readonly count: YarnCount;
+  /** A rough guess, for a yarn of which nothing else is known. */
+  readonly class: YarnClassNumber;
+}
+
+type OnlyOne<T> = { [K in keyof T]: { readonly [G in K]: T[G] } & { readonly [O in Exclude<keyof T, K>]?: never } }[keyof T];
+
 /** How thick the yarn is, said in exactly one way. */
-export type YarnGrist =
-  | { readonly tex: number; readonly metresPer100g?: never; readonly count?: never }
-  | { readonly metresPer100g: number; readonly tex?: never; readonly count?: never }
-  | { readonly count: YarnCount; readonly tex?: never; readonly metresPer100g?: never };
+export type YarnGrist = OnlyOne<GristWays>;
 
 export interface YarnTraits {
   readonly label?: string;
@@ -40,6 +52,8 @@ export interface YarnTraits {
   readonly ashenhurstK?: number;
   /** Snug wraps in an inch, measured; 1 to 60. */
   readonly wrapsPerInch?: number;
+  /** Thickness of one strand as it lies free, measured; instead of wraps, for what cannot be wrapped, such as roving. */
+  readonly freeDiameterMm?: number;
   readonly ball?: { readonly metres: number; readonly grams: number };
   readonly fibre?: string;
 }

@@ -15,6 +15,7 @@ export const YARN_WAYS = [
   { value: 'tex', label: 'Tex' },
   { value: 'nm', label: 'Nm' },
   { value: 'ne-cotton', label: 'Cotton count' },
+  { value: 'spun-silk', label: 'Spun silk' },
   { value: 'ne-worsted', label: 'Worsted count' },
   { value: 'lea', label: 'Linen lea' },
   { value: 'run', label: 'Woollen run' },
@@ -22,6 +23,7 @@ export const YARN_WAYS = [
   { value: 'jute', label: 'Jute pounds' },
   { value: 'grain', label: 'American grain' },
   { value: 'denier', label: 'Denier' },
+  { value: 'dtex', label: 'Decitex' },
 ] as const;
 
 export type YarnWay = (typeof YARN_WAYS)[number]['value'];

@@ -1,5 +1,5 @@
 import { useState } from 'react';
-import { ashenhurstOf, BALL, BY, COLOUR, FIBRE, gristAsked, LABEL, ROLE, STRANDS, WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
+import { ashenhurstOf, BALL, BY, COLOUR, FIBRE, FREE_DIAMETER, gristAsked, LABEL, ROLE, STRANDS, WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { Field } from '#islands/ui/Field.tsx';
 import { fieldId } from '#islands/ui/field-id.ts';
@@ -27,7 +27,7 @@ export function YarnRow({ texts, prefix, row, isOpen }: YarnRowProps) {
   const [beginsOpen] = useState(isOpen || [...wrong.keys()].some((field) => field.startsWith(prefix)));
   const by = textOf(texts, 'by');
   const grist = textOf(texts, 'grist');
-  const weight = by === 'wraps' ? `${textOf(texts, 'wrapsPerInch')} wraps` : grist === '' ? '' : `${grist} ${WAYS[by] ?? by}`;
+  const weight = by === 'wraps' ? `${textOf(texts, 'wrapsPerInch')} wraps` : by === 'class' ? `class ${grist}` : grist === '' ? '' : `${grist} ${WAYS[by] ?? by}`;
   return (
     <details className="yarn-row" open={beginsOpen} id={row === undefined ? 'warp-yarn' : `yarn-${String(row.index)}`}>
       <summary>
@@ -43,7 +43,7 @@ export function YarnRow({ texts, prefix, row, isOpen }: YarnRowProps) {
         <AskedField asked={BY} texts={texts} prefix={prefix} className="half" />
         {by === 'wraps' ? <p className="half small quiet self-end">{WRAPS_ALONE}</p> : <AskedField asked={gristAsked(by)} texts={texts} prefix={prefix} className="half" />}
         {by === 'wraps' && <input type="hidden" name={`${prefix}grist`} value={grist} />}
-        <AskedField asked={WRAPS} texts={texts} prefix={prefix} className="whole" />
+        <AskedFields asked={[WRAPS, FREE_DIAMETER]} texts={texts} prefix={prefix} className="half" />
         <AskedFields asked={[STRANDS, ...BALL]} texts={texts} prefix={prefix} className="third" />
         <AskedFields asked={[FIBRE, ashenhurstOf(row === undefined ? 'warp' : 'weft')]} texts={texts} prefix={prefix} className="half" />
         {row !== undefined && (
@@ -57,7 +57,7 @@ export function YarnRow({ texts, prefix, row, isOpen }: YarnRowProps) {
   );
 }
 
-const WAYS: Readonly<Record<string, string>> = { metresPer100g: 'm in 100 g', tex: 'tex', nm: 'Nm', 'ne-cotton': 'cotton count', 'ne-worsted': 'worsted count', lea: 'lea', run: 'run', yorkshire: 'skein', denier: 'denier', jute: 'jute', grain: 'grain' };
+const WAYS: Readonly<Record<string, string>> = { metresPer100g: 'm in 100 g', tex: 'tex', nm: 'Nm', 'ne-cotton': 'cotton count', 'spun-silk': 'silk count', 'ne-worsted': 'worsted count', lea: 'lea', run: 'run', yorkshire: 'skein', denier: 'denier', dtex: 'dtex', jute: 'jute', grain: 'grain' };
 
 /** The colour as text, which every browser can send, with the browser's own picker in the box. */
 function DyeField({ texts, prefix }: { readonly texts: Texts; readonly prefix: string }) {

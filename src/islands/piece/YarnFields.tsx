@@ -36,7 +36,7 @@ export function YarnFields({ pattern, ...shared }: YarnFieldsProps) {
   );
 }
 
-const gristHints: Readonly<Record<string, string>> = { metresPer100g: 'Metres in a ball, times 100, through its grams.', nm: 'As 2/16 or 6/2.', 'ne-cotton': 'As 8/2.', 'ne-worsted': 'As 2/8.', tex: 'Grams in a kilometre.' };
+const gristHints: Readonly<Record<string, string>> = { class: 'A rough guess: a label or wraps tell more.', metresPer100g: 'Metres in a ball, times 100, through its grams.', nm: 'As 2/16 or 6/2.', 'ne-cotton': 'As 8/2.', 'ne-worsted': 'As 2/8.', tex: 'Grams in a kilometre.' };
 
 function OwnYarn({ role, patternYarn, typed, fitted, faults, change, alive }: Omit<YarnFieldsProps, 'pattern'> & { role: string; patternYarn: Yarn }) {
   const texts = yarnOf(typed, role);

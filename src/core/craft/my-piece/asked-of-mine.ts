@@ -42,7 +42,7 @@ export const ENDS: Asked = {
 
 /** Her yarn is said in the ways a label says it, or by wraps where there is none. */
 export const AS_PATTERN = 'pattern';
-const WAYS: ReadonlySet<string> = new Set(['metresPer100g', 'tex', 'nm', 'ne-cotton', 'ne-worsted', 'wraps']);
+const WAYS: ReadonlySet<string> = new Set(['metresPer100g', 'tex', 'nm', 'ne-cotton', 'ne-worsted', 'wraps', 'class']);
 export const YARN_BY = [{ text: AS_PATTERN, label: 'As in the pattern' }, ...(BY.kind === 'choice' ? BY.options.filter(({ text }) => WAYS.has(text)) : [])] as const;
 
 /** Besides the way and its number. */

@@ -4,9 +4,9 @@
  */
 import type { MyPiece } from '#core/craft/fit.ts';
 import type { Piece, Yarn } from '#core/craft/piece.ts';
-import { gristAsked } from '#core/craft/piece-form/asked-of-yarn.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
+import { gristTexts } from '#core/craft/piece-form/type-piece.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
@@ -22,12 +22,6 @@ export interface TypedMine {
 
 export const yarnOf = (typed: TypedMine, role: string): Texts => (Object.hasOwn(typed.yarns, role) ? (typed.yarns[role] ?? {}) : {});
 export const isOwnYarn = (texts: Texts): boolean => !['', AS_PATTERN].includes(textOf(texts, 'by'));
-
-function gristTexts(yarn: Yarn): Texts {
-  if (yarn.count !== undefined) return { by: yarn.count.system, grist: yarn.count.text };
-  const by = yarn.tex === undefined ? 'metresPer100g' : 'tex';
-  return { by, grist: fieldText(yarn.tex ?? yarn.metresPer100g, gristAsked(by), 'cm') };
-}
 
 function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
   // Until she says otherwise, her yarn is as many strands of the same colour.

@@ -80,7 +80,7 @@ export function fieldsOfTyped({ units, texts, warpYarn, yarns, bands }: TypedPie
 
 const WARP_YARN = 'warp.yarn';
 /** What a piece calls the thickness of a yarn is one field of the form. */
-const GRIST_KEYS: ReadonlySet<string> = new Set(['tex', 'metresPer100g', 'count']);
+const GRIST_KEYS: ReadonlySet<string> = new Set(['tex', 'metresPer100g', 'count', 'class']);
 
 /**
  * The field that a place of the piece (JSON pointer) is typed in: the nearest there is. Bands and yarns as a whole are

@@ -91,7 +91,7 @@ function readGrist(reading: Reading, texts: Texts, prefix: string, usualK: numbe
   }
   const grist = reading.value(texts, gristAsked(by), prefix);
   if (grist === undefined) return {};
-  return by === 'tex' || by === 'metresPer100g' ? { [by]: grist } : { count: { text: grist, system: by } };
+  return by === 'tex' || by === 'metresPer100g' || by === 'class' ? { [by]: grist } : { count: { text: grist, system: by } };
 }
 
 function readYarn(reading: Reading, texts: Texts, prefix: string, usualK: number): Group {

@@ -24,10 +24,11 @@ function beatTexts(beat: Beat, units: Units): Texts {
   return word === undefined ? { ...texts, 'beat.by': 'own' } : { ...texts, 'beat.by': word, [OWN_BEAT.key]: '' };
 }
 
-function gristTexts(yarn: Yarn): Texts {
+/** How thick the yarn is, in the two fields that ask for it. */
+export function gristTexts(yarn: Yarn): Texts {
   if (yarn.count !== undefined) return { by: yarn.count.system, grist: yarn.count.text };
-  const by = yarn.tex === undefined ? 'metresPer100g' : 'tex';
-  return { by, grist: fieldText(yarn.tex ?? yarn.metresPer100g, gristAsked(by), 'cm') };
+  const by = yarn.tex !== undefined ? 'tex' : yarn.class !== undefined ? 'class' : 'metresPer100g';
+  return { by, grist: fieldText(yarn[by], gristAsked(by), 'cm') };
 }
 
 const yarnTexts = (yarn: Yarn, units: Units): Texts => ({ ...textsOf(yarn, YARN_TRAITS, units), ...gristTexts(yarn) });

@@ -24,6 +24,7 @@ export type WarningCode =
   | 'W_SILK'
   | 'W_LOFT'
   | 'W_LABEL'
+  | 'W_CLASS'
   | 'W_PARITY'
   | 'W_WIDTH'
   | 'W_CLAMPED'

@@ -35,12 +35,12 @@ function smallerIsPlies(a: number, b: number): TwoNumbers {
   return b <= a ? { count: a, plies: b, doubtful } : { count: b, plies: a, doubtful };
 }
 
-/** Denier, jute, grain: the weight first. More than a dozen "plies" are more likely filaments of one thread. */
+/** Denier, decitex, jute, grain: the weight first. More than a dozen "plies" are more likely filaments of one thread. */
 function weightFirst(a: number, b: number): TwoNumbers {
   return b > 12 ? { count: a, plies: 1, doubtful: true } : { count: a, plies: b, doubtful: false };
 }
 
-const READERS: Readonly<Record<CountSystem, (a: number, b: number) => TwoNumbers>> = {
+const READERS: Readonly<Record<Exclude<CountSystem, 'spun-silk'>, (a: number, b: number) => TwoNumbers>> = {
   'ne-cotton': countFirst,
   lea: countFirst,
   'ne-worsted': smallerIsPlies,
@@ -48,6 +48,7 @@ const READERS: Readonly<Record<CountSystem, (a: number, b: number) => TwoNumbers
   nm: smallerIsPlies,
   yorkshire: smallerIsPlies,
   denier: weightFirst,
+  dtex: weightFirst,
   jute: weightFirst,
   grain: weightFirst,
 };
@@ -66,7 +67,8 @@ export function readCount(text: string, system: CountSystem, fibre?: string): Re
   const second = match[2] === undefined ? 1 : Number(match[2]);
   if (first === 0 || second === 0) return undefined;
   if (match[2] === undefined) return { count: first, plies: 1, tex: texFromCount(first, system) };
-  if (system === 'ne-cotton' && fibre?.trim().toLowerCase() === 'silk') {
+  // Sellers of silk write the cotton count, too.
+  if (system === 'spun-silk' || (system === 'ne-cotton' && /\bsilk\b/i.test(fibre ?? ''))) {
     return { count: first, plies: second, tex: texFromCount(first, system), doubt: 'silk' };
   }
   const { count, plies, doubtful } = READERS[system](first, second);

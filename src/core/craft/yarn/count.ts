@@ -30,12 +30,14 @@ const hanksPerPound = (yards: number): number => TEX_YARDS_PER_POUND / yards;
 
 export const COUNT_SYSTEMS: Readonly<Record<CountSystem, SystemFacts>> = {
   'ne-cotton': { label: 'cotton count (840 yd hanks in a pound)', kind: 'indirect', texOfOne: hanksPerPound(840) },
+  'spun-silk': { label: 'spun silk (840 yd hanks in a pound)', kind: 'indirect', texOfOne: hanksPerPound(840) },
   'ne-worsted': { label: 'worsted count (560 yd hanks in a pound)', kind: 'indirect', texOfOne: hanksPerPound(560) },
   nm: { label: 'Nm (kilometres in a kilogram)', kind: 'indirect', texOfOne: 1000 },
   lea: { label: 'linen lea (300 yd in a pound)', kind: 'indirect', texOfOne: hanksPerPound(300) },
   run: { label: 'woollen run (1600 yd in a pound)', kind: 'indirect', texOfOne: hanksPerPound(1600) },
   yorkshire: { label: 'Yorkshire skein (256 yd in a pound)', kind: 'indirect', texOfOne: hanksPerPound(256) },
   denier: { label: 'denier (grams in 9000 m)', kind: 'direct', texOfOne: 1 / 9 },
+  dtex: { label: 'decitex (grams in 10 000 m)', kind: 'direct', texOfOne: 1 / 10 },
   jute: {
     label: 'jute (pounds in a spyndle of 14 400 yd)',
     kind: 'direct',
@@ -76,15 +78,25 @@ export function texFromYardsPerPound(yards: number): number {
   return TEX_YARDS_PER_POUND / yards;
 }
 
+/** An ounce is a sixteenth of a pound. */
+export function texFromYardsPerOunce(yards: number): number {
+  return texFromYardsPerPound(16 * yards);
+}
+
 /** A label that says so many metres in so many grams. */
 export function texFromBall(ball: { readonly metres: number; readonly grams: number }): number {
   return (1000 * ball.grams) / ball.metres;
 }
 
 /**
- * tex of several yarns twisted together. Twist takes up length, so the same mass
- * lies in less of it: `twistContraction` is the share that is lost, 0 to 0.2.
+ * tex of several yarns, equal or not, twisted together. Twist takes up length, so the same
+ * mass lies in less of it: `twistContraction` is the share that is lost, from 0 to less than 0.2.
  */
 export function texOfFolded(strandTex: readonly number[], twistContraction = 0): number {
   return strandTex.reduce((sum, tex) => sum + tex, 0) / (1 - twistContraction);
+}
+
+/** The share of their length that strands lost when they became a yarn of this tex. */
+export function twistContraction(strandTex: readonly number[], foldedTex: number): number {
+  return 1 - strandTex.reduce((sum, tex) => sum + tex, 0) / foldedTex;
 }

@@ -43,6 +43,29 @@ describe('a yarn', () => {
     expect(warningsOf(withGround({ fibre: 'Silk', count: { text: '40/2', system: 'ne-cotton' } }))).toContain('W_SILK /yarns/ground/count/text');
   });
 
+  test('of spun silk is asked about in its own count and in cotton’s', () => {
+    expect(warningsOf(withGround({ count: { text: '20/2', system: 'spun-silk' } }))).toContain('W_SILK /yarns/ground/count/text');
+    expect(warningsOf(withGround({ fibre: 'spun silk', count: { text: '20/2', system: 'ne-cotton' } }))).toContain('W_SILK /yarns/ground/count/text');
+    expect(warningsOf(withGround({ fibre: 'silkworm brand cotton', count: { text: '20/2', system: 'ne-cotton' } }))).not.toContain('W_SILK /yarns/ground/count/text');
+  });
+
+  test('known by nothing but its class is reckoned from the middle of it, and says how rough that is', () => {
+    expect(warningWords(withGround({ class: 4 }), 'W_CLASS')).toEqual([
+      'Class 4, medium, goes from 120 to 200 m in 100 g, so every amount is a rough guess. Read the label, or wrap the yarn round a ruler.',
+    ]);
+    expect(warningWords(withGround({ class: 0 }), 'W_CLASS')[0]).toContain('goes from 600 m in 100 g upwards');
+    expect(warningWords({ ...(withGround({ class: 6 }) as object), loom: { ...PLAIN_PIECE.loom, nailPitchMm: 20 } }, 'W_CLASS')[0]).toContain('goes up to 100 m in 100 g');
+    const { massG, netMm } = planOf(withGround({ class: 4 })).yarns['ground'] ?? { massG: 0, netMm: 1 };
+    expect(massG / netMm).toBeCloseTo(100 / 160_000, 12);
+  });
+
+  test('whose class stands beside a label is taken by the label, and says if the two do not agree', () => {
+    expect(warningsOf(withGround({ class: 4, ball: { metres: 80, grams: 50 } })).filter((found) => !found.startsWith('W_PARITY'))).toEqual([]);
+    expect(warningWords(withGround({ class: 4, ball: { metres: 400, grams: 100 } }), 'W_LABEL')).toEqual([
+      'Metres and grams of the ball come to 400 m in 100 g, which is no yarn of class 4. The ball is used.',
+    ]);
+  });
+
   test('whose label tells metres and grams is not asked about, and is taken by them', () => {
     const labelled = withGround({ count: { text: '2/8', system: 'ne-cotton' }, ball: { metres: 170, grams: 25 } });
     expect(warningsOf(labelled)).not.toContain('W_AMBIGUOUS /yarns/ground/count/text');

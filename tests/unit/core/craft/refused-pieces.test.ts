@@ -117,6 +117,12 @@ describe('a yarn that cannot be', () => {
     [{ tex: 400, strands: 1.5 }, 'E_COUNT /yarns/ground/strands'],
     [{ tex: 400, ashenhurstK: 1.1 }, 'E_RANGE /yarns/ground/ashenhurstK'],
     [{ tex: 400, wrapsPerInch: 61 }, 'E_RANGE /yarns/ground/wrapsPerInch'],
+    [{ tex: 400, wrapsPerInch: 10, freeDiameterMm: 2.5 }, 'E_ENUM /yarns/ground/freeDiameterMm'],
+    [{ tex: 400, freeDiameterMm: 0 }, 'E_RANGE /yarns/ground/freeDiameterMm'],
+    [{ class: 8 }, 'E_RANGE /yarns/ground/class'],
+    [{ class: 2.5 }, 'E_COUNT /yarns/ground/class'],
+    [{ class: 'medium' }, 'E_NUM /yarns/ground/class'],
+    [{ tex: 400, class: 4 }, 'E_ENUM /yarns/ground/class'],
   ])('%j', (yarn, refusal) => {
     expect(refusals({ ...PLAIN_PIECE, yarns: { ground: yarn } })).toEqual([refusal]);
   });

@@ -27,6 +27,7 @@ describe('a count on a label', () => {
     ['40/2', 'lea', 40, 2],
     ['150/2', 'denier', 150, 2],
     ['8/3', 'jute', 8, 3],
+    ['300/2', 'dtex', 300, 2],
   ] as const)('%s in %s is %f in %i plies, beyond doubt', (text, system, count, plies) => {
     expect(readCount(text, system)).toEqual({ count, plies, tex: expect.closeTo(plies * texFromCount(count, system), 9) as unknown });
   });
@@ -44,6 +45,7 @@ describe('a count on a label', () => {
 
   test('spun silk names the folded yarn', () => {
     expect(readCount('40/2', 'ne-cotton', ' SILK ')).toMatchObject({ plies: 2, doubt: 'silk', tex: expect.closeTo(texFromCount(40, 'ne-cotton'), 9) as unknown });
+    expect(readCount('40/2', 'spun-silk')).toMatchObject({ plies: 2, doubt: 'silk', tex: expect.closeTo(texFromCount(40, 'ne-cotton'), 9) as unknown });
     expect(readCount('40', 'ne-cotton', 'silk')).not.toHaveProperty('doubt');
     expect(readCount('40/2', 'nm', 'silk')).not.toMatchObject({ doubt: 'silk' });
   });
@@ -77,6 +79,8 @@ describe('a thread', () => {
     expect(gristOf({ count: { text: '10', system: 'nm' } })).toEqual({ tex: 100, plies: 1 });
     expect(gristOf({ count: { text: '10', system: 'nm' }, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1 });
     expect(gristOf({ tex: 400, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 400, plies: 1 });
+    expect(gristOf({ class: 3 }).tex).toBeCloseTo(444.444, 3);
+    expect(gristOf({ class: 3, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1 });
   });
 
   test('of a yarn that was never read is a programmer’s mistake', () => {
@@ -87,6 +91,14 @@ describe('a thread', () => {
     expect(threadOf({ tex: 500 }, 0.9).compressedMm).toBeCloseTo(0.8960071, 6);
     expect(threadOf({ tex: 500, ashenhurstK: 0.84 }, 0.9).compressedMm).toBeCloseTo(0.9600076, 6);
     expect(threadOf({ tex: 500, wrapsPerInch: 12.7 }, 0.9).loftMm).toBeCloseTo(2, 12);
+  });
+
+  test('of roving lies as thick as it was measured, and of a class as thick as its middle', () => {
+    expect(threadOf({ tex: 25_000, freeDiameterMm: 28 }, 0.84)).toMatchObject({ loftMm: 28, strandLoftMm: 28 });
+    expect(threadOf({ class: 4 }, 0.84)).toMatchObject({ tex: 625, loftMm: 25.4 / 10.5 });
+    expect(threadOf({ class: 4, wrapsPerInch: 10 }, 0.84).loftMm).toBeCloseTo(2.54, 12);
+    const labelled = threadOf({ class: 4, ball: { metres: 80, grams: 50 } }, 0.84);
+    expect(labelled.loftMm).toBeCloseTo(loftFromCompressed(labelled.compressedMm), 12);
   });
 
   test('weighs its length', () => {

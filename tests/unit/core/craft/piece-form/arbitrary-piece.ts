@@ -22,11 +22,12 @@ const colour = fc.stringMatching(/^#[0-9a-f]{6}$/);
 const grist = fc.oneof(
   number.map((tex) => ({ tex })),
   number.map((metresPer100g) => ({ metresPer100g })),
-  fc.record({ text: fc.constantFrom('8/2', '2/16', '16', '4,5'), system: fc.constantFrom('nm', 'ne-cotton', 'ne-worsted', 'lea', 'run', 'denier', 'jute', 'yorkshire', 'grain') }).map((counted) => ({ count: counted })),
+  fc.constantFrom(0, 1, 2, 3, 4, 5, 6, 7).map((number) => ({ class: number })),
+  fc.record({ text: fc.constantFrom('8/2', '2/16', '16', '4,5'), system: fc.constantFrom('nm', 'ne-cotton', 'spun-silk', 'dtex', 'ne-worsted', 'lea', 'run', 'denier', 'jute', 'yorkshire', 'grain') }).map((counted) => ({ count: counted })),
 );
 const yarn: fc.Arbitrary<Yarn> = fc.tuple(grist, fc.record({
   label: perhaps(words), colour: perhaps(colour), strands: perhaps(count), ashenhurstK: perhaps(fc.double({ min: 0.75, max: 1, noNaN: true })),
-  wrapsPerInch: perhaps(number), ball: perhaps(fc.record({ metres: number, grams: number })), fibre: perhaps(words),
+  wrapsPerInch: perhaps(number), freeDiameterMm: perhaps(mm), ball: perhaps(fc.record({ metres: number, grams: number })), fibre: perhaps(words),
 })).map(([thick, traits]): Yarn => ({ ...present(traits), ...thick }));
 
 const shapeOf = (role: fc.Arbitrary<string>): fc.Arbitrary<Shape> => {
