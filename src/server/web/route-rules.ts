@@ -29,6 +29,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/_components': 'public',
   '/api/payments/events': 'machine',
   '/api/photos': 'signed-in',
+  '/api/openapi.json': 'machine',
   '/api/reckon': 'machine',
   '/api/ticks': 'signed-in',
   '/api/workroom/lesson-check': 'teacher',

@@ -1,0 +1,185 @@
+/** A piece as it is asked about: loom, warp, beat, yarns by role, and the bands in the order they are woven. */
+import { choice, closed, exactlyOne, flag, list, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
+
+const LONGEST_MM = 20_000;
+export const lengthMm = (description: string, max = LONGEST_MM): Schema => number(description, { above: 0, max });
+const allowanceMm = (description: string): Schema => number(description, { min: 0, max: LONGEST_MM });
+const role = (description: string): Schema => text(description, { minLength: 1, maxLength: 40 });
+const rows = whole('Rows.', { min: 1, max: 10_000 });
+const bandHeight = lengthMm('Height of the band in the finished piece, mm.');
+
+/** A band of one technique; every band may have a name. */
+function band(description: string, technique: string, properties: Readonly<Record<string, Schema>>, optional: readonly string[] = [], more: Schema = {}): Schema {
+  const named = { technique: { const: technique }, name: text('How lessons call the band; once in a piece.', { pattern: '^[a-z0-9-]{1,40}$' }), yarn: role('Yarn role.') };
+  return closed(description, { ...named, ...properties }, ['name', ...optional], more);
+}
+
+export const MEASURES = {
+  shape: choice('A triangle’s base is its first row.', 'triangle', 'rectangle', 'circle'),
+  baseMm: lengthMm('Of a triangle or rectangle.'),
+  heightMm: lengthMm('Of a triangle or rectangle.'),
+  radiusMm: lengthMm('Of a circle.', LONGEST_MM / 2),
+} as const;
+
+/** Which measures belong to which shape. */
+export const MEASURES_OF_SHAPE: Schema = {
+  oneOf: [
+    { properties: { shape: { enum: ['triangle', 'rectangle'] }, radiusMm: false }, required: ['baseMm', 'heightMm'] },
+    { properties: { shape: { const: 'circle' }, baseMm: false, heightMm: false }, required: ['radiusMm'] },
+  ],
+};
+
+const BANDS: Readonly<Record<string, Schema>> = {
+  TabbyBand: band(
+    'Over one, under one, with shapes in other yarns if wished.',
+    'tabby',
+    {
+      heightMm: number('Height of the band, mm.', { min: 0, max: LONGEST_MM }),
+      fill: { const: true, description: 'The band takes what height is left; one in a piece.' },
+      shapes: list('Shapes woven into the ground.', ref('Shape'), { maxItems: 24 }),
+    },
+    ['heightMm', 'fill', 'shapes'],
+    exactlyOne(['heightMm'], ['fill']),
+  ),
+  SoumakBand: band('Weft wrapped round the ends, over some and back under fewer.', 'soumak', {
+    over: whole('Ends passed over.', { min: 2, max: 100 }),
+    back: whole('Ends gone back under, fewer than `over`.', { min: 1, max: 99 }),
+    rows,
+    tabbyBetween: whole('Picks of tabby between two rows.', { min: 0, max: 100 }),
+    tabbyYarn: role('Yarn role of the tabby between.'),
+  }),
+  RyaBand: band('Cut strands knotted round two legs of ends.', 'rya', {
+    strands: whole('Strands in a knot.', { min: 1, max: 100 }),
+    legEnds: whole('Ends in each leg.', { min: 1, max: 100 }),
+    pileMm: lengthMm('How far the pile hangs, mm.'),
+    trimMm: number('To be trimmed away, mm.', { min: 0, max: 1000 }),
+    rows,
+    heightMm: bandHeight,
+  }),
+  RovingBand: band(
+    'Unspun fibre laid over and under groups of ends, puffed up on the face.',
+    'roving',
+    {
+      over: whole('Ends passed over, then under.', { min: 1, max: 200 }),
+      bulgeMm: number('How far it is puffed up, mm.', { min: 0, max: 1000 }),
+      heightMm: bandHeight,
+      passes: whole('Passes; 1 when missing.', { min: 1, max: 1000 }),
+    },
+    ['passes'],
+  ),
+  HemStitchBand: band('A row of stitches round bundles of ends, reaching into the cloth.', 'hem-stitch', {
+    bundleEnds: whole('Ends in a bundle.', { min: 1, max: 100 }),
+    reachPicks: whole('Rows the stitch reaches into the cloth.', { min: 1, max: 100 }),
+  }),
+  LoopPileBand: band(
+    'Loops over a rod, or drawn up to a height.',
+    'loop-pile',
+    { rodMm: lengthMm('Thickness of the rod, mm.', 500), loopMm: lengthMm('Height of a loop, mm.', 1000), rows, heightMm: bandHeight },
+    ['rodMm', 'loopMm'],
+    exactlyOne(['rodMm'], ['loopMm']),
+  ),
+  TwiningBand: band('Two wefts crossing between every two ends.', 'twining', { rows }),
+};
+
+const BAND_OF: Readonly<Record<string, string>> = {
+  tabby: 'TabbyBand',
+  soumak: 'SoumakBand',
+  rya: 'RyaBand',
+  roving: 'RovingBand',
+  'hem-stitch': 'HemStitchBand',
+  'loop-pile': 'LoopPileBand',
+  twining: 'TwiningBand',
+};
+
+const Shape = closed(
+  'A figure in the ground of a tabby band.',
+  {
+    ...MEASURES,
+    yarn: role('Yarn role.'),
+    centreMm: number('Middle of its base from the left selvedge, mm; the middle of the piece when missing.', { min: 0, max: LONGEST_MM }),
+    bottomMm: number('From the band’s first row, mm; 0 when missing.', { min: 0, max: LONGEST_MM }),
+    leanMm: number('How far its top stands to the right of the base’s middle; negative: to the left.', { min: -LONGEST_MM, max: LONGEST_MM }),
+    symmetric: flag('Steps alike on both sides; true when missing, unless it leans.'),
+    join: choice('How colours meet; `slit` when missing.', 'slit', 'dovetail', 'interlock'),
+  },
+  ['baseMm', 'heightMm', 'radiusMm', 'centreMm', 'bottomMm', 'leanMm', 'symmetric', 'join'],
+  MEASURES_OF_SHAPE,
+);
+
+const Loom = closed(
+  'A frame with nails along two rails.',
+  {
+    nailPitchMm: number('From nail to nail, centre to centre.', { min: 1, max: 100 }),
+    warping: choice('Round every nail, or along two neighbouring ones.', 'zigzag', 'two-nail'),
+    everyNthNail: whole('1 uses every nail, 2 every second one; 1 when missing.', { min: 1, max: 50 }),
+    nailDiameterMm: lengthMm('1.6 when missing.', 50),
+    insideHeightMm: lengthMm('From the nails of one rail to those of the other.'),
+    insideWidthMm: lengthMm('Clear rail. Not looked at when missing.'),
+  },
+  ['everyNthNail', 'nailDiameterMm', 'insideWidthMm'],
+);
+
+const Warp = closed(
+  'The warp.',
+  {
+    yarn: ref('Yarn'),
+    endsTogether: whole('2 weaves every two neighbours as one; 1 when missing.', { min: 1, max: 2 }),
+    parity: choice('What the pattern asks of the number of working ends; `any` when missing.', 'any', 'even', 'odd'),
+    endCount: whole('The number of ends where it is fixed; else it follows from the width.', { min: 4, max: 2000 }),
+    tieMm: lengthMm('For tying at the first and the last nail, each; 150 when missing.'),
+  },
+  ['endsTogether', 'parity', 'endCount', 'tieMm'],
+);
+
+const ALLOWANCES: Readonly<Record<string, Schema>> = {
+  drawIn: number('Share by which the cloth draws in; 0.02, in balanced cloth 0.08.', { min: 0, below: 0.4 }),
+  relaxation: number('Share by which it shortens when cut off; 0.02.', { min: 0, max: 0.2 }),
+  wetShrinkage: number('Share by which washing shrinks it; 0.', { min: 0, max: 0.2 }),
+  topMm: allowanceMm('Warp left unwoven at the top; 40.'),
+  bottomMm: allowanceMm('Warp left unwoven at the bottom; 60.'),
+  tailMm: lengthMm('Yarn left hanging where a weft begins or ends; 50.', 1000),
+  loadMm: lengthMm('Yarn on one shuttle; 8000.', 1_000_000),
+  marginWeft: number('Share bought on top; 0.15, with a counted swatch 0.1.', { min: 0, max: 1 }),
+  marginWarp: number('Share bought on top; 0.1.', { min: 0, max: 1 }),
+};
+
+export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
+  ...BANDS,
+  Band: {
+    oneOf: Object.values(BAND_OF).map(ref),
+    discriminator: { propertyName: 'technique', mapping: Object.fromEntries(Object.entries(BAND_OF).map(([technique, name]) => [technique, `#/components/schemas/${name}`])) },
+  },
+  Shape,
+  Loom,
+  Warp,
+  Piece: closed(
+    'A piece, in millimetres. Shares are fractions: 0.02 is two per cent.',
+    {
+      craft: { const: 'frame-loom' },
+      size: closed('Finished size of the woven cloth, without fringe.', { widthMm: lengthMm('Width.'), heightMm: lengthMm('Height.') }),
+      loom: ref('Loom'),
+      warp: ref('Warp'),
+      beat: closed(
+        'How closely rows lie: by the yarn’s thickness (hanging 0.7, tapestry 1.1, rug 1.45), or as counted on a swatch.',
+        { picksPerWeftDiameter: number('Rows in one compressed weft thickness.', { min: 0.2, max: 2 }), picksPerCm: number('Rows in a centimetre.', { above: 0, max: 200 }) },
+        ['picksPerWeftDiameter', 'picksPerCm'],
+        exactlyOne(['picksPerWeftDiameter'], ['picksPerCm']),
+      ),
+      mode: choice('Which yarn bends; `straight-warp` when missing.', 'straight-warp', 'balanced'),
+      allowances: closed('Each with its default.', ALLOWANCES, Object.keys(ALLOWANCES)),
+      dowel: closed('The rod it hangs from.', { diameterMm: lengthMm('Thickness.', 200), lengthMm: number('Length; the width and 40 mm on each side when missing.', { min: 60, max: LONGEST_MM }) }, ['lengthMm']),
+      hangs: choice('`turned` hangs with the end that was woven first at the top.', 'as-woven', 'turned'),
+      seed: whole('Of the drawing’s chance.', { min: 0, max: Number.MAX_SAFE_INTEGER }),
+      yarns: {
+        type: 'object',
+        description: 'By yarn role.',
+        propertyNames: { pattern: '^[A-Za-z][A-Za-z0-9-]{0,39}$' },
+        additionalProperties: ref('Yarn'),
+        maxProperties: 60,
+      },
+      bands: list('In the order they are woven.', ref('Band'), { minItems: 1, maxItems: 200 }),
+    },
+    ['mode', 'allowances', 'dowel', 'hangs', 'seed'],
+  ),
+  PieceQuestion: closed('A whole plan.', { what: { const: 'piece' }, piece: ref('Piece') }),
+};

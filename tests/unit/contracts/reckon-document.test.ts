@@ -1,0 +1,161 @@
+/**
+ * The OpenAPI description against the meta-schema of OpenAPI 3.1, against every answer of the
+ * check rows, and against the reader of questions: what the schemas refuse the reader refuses,
+ * and whatever is missing, beyond a limit, of another kind or unknown, both refuse.
+ */
+import { Validator } from '@seriousme/openapi-schema-validator';
+import { Ajv2020, type ValidateFunction } from 'ajv/dist/2020.js';
+import fc from 'fast-check';
+import { describe, expect, test } from 'vitest';
+import { RECKON_DOCUMENT, SCHEMAS_OF } from '#contracts/reckon-api/document.ts';
+import { reckon, type Question } from '#core/craft/reckon.ts';
+import { answerQuestion } from '#server/web/answer-question.ts';
+import { WIRE_ROWS } from '../../reference/wire-rows.ts';
+
+const { components } = RECKON_DOCUMENT as { readonly components: { readonly schemas: Readonly<Record<string, object>> } };
+// Two words are OpenAPI's, not JSON Schema's.
+const ajv = new Ajv2020({ allErrors: true, strict: true, strictRequired: false, strictTypes: false, keywords: ['discriminator', 'components'] });
+ajv.addSchema({ $id: 'reckon', components }, undefined, undefined, false);
+
+const compiled = new Map<string, ValidateFunction>();
+function schemaNamed(name: string): ValidateFunction {
+  const known = compiled.get(name) ?? ajv.compile({ $ref: `reckon#/components/schemas/${name}` });
+  compiled.set(name, known);
+  return known;
+}
+const fits = (name: string, value: unknown): string[] => (schemaNamed(name)(value) ? [] : (schemaNamed(name).errors ?? []).map((error) => `${error.instancePath} ${error.message ?? ''}`));
+
+type Json = null | boolean | number | string | readonly Json[] | { readonly [key: string]: Json };
+const isRecord = (value: Json): value is Readonly<Record<string, Json>> => typeof value === 'object' && value !== null && !Array.isArray(value);
+const whatOf = (question: unknown): Question => (question as { what: Question }).what;
+
+test('is an OpenAPI 3.1 document', async () => {
+  const result = await new Validator().validate(structuredClone(RECKON_DOCUMENT) as Record<string, unknown>);
+  expect(result).toEqual({ valid: true });
+});
+
+test('names nothing it does not define, and defines nothing it does not name', () => {
+  const text = JSON.stringify(RECKON_DOCUMENT);
+  const named = new Set([...text.matchAll(/"#\/components\/schemas\/(\w+)"/gu)].map(([, name]) => name));
+  expect([...named].sort()).toEqual(Object.keys(components.schemas).sort());
+});
+
+describe('the check rows', () => {
+  test.each(WIRE_ROWS.map((row) => [row.row, row] as const))('%s: question and answer fit their schemas', async (_, { question, refused }) => {
+    const response = answerQuestion(JSON.stringify(question), 'a-request');
+    const body: unknown = await response.json();
+    const schemas = SCHEMAS_OF[whatOf(question)];
+    if (refused !== undefined) {
+      expect(fits('Refusal', body)).toEqual([]);
+      return;
+    }
+    expect(fits(schemas.question, question)).toEqual([]);
+    expect(fits(schemas.answer, body)).toEqual([]);
+  });
+
+  test('ask every question', () => {
+    expect([...new Set(WIRE_ROWS.map(({ question }) => whatOf(question)))].sort()).toEqual(Object.keys(SCHEMAS_OF).sort());
+  });
+});
+
+test('the examples of the document are answered', () => {
+  const text = RECKON_DOCUMENT as { paths: { '/api/reckon': { post: { requestBody: { content: { 'application/json': { examples: Record<string, { value: unknown }> } } } } } } };
+  for (const { value } of Object.values(text.paths['/api/reckon'].post.requestBody.content['application/json'].examples)) {
+    expect(fits(SCHEMAS_OF[whatOf(value)].question, value)).toEqual([]);
+    expect(reckon(value).ok).toBe(true);
+  }
+});
+
+describe('reader and schemas', () => {
+  /** Every key that any schema knows, so that each is tried somewhere. */
+  const FULL_PIECE = {
+    what: 'piece',
+    piece: {
+      craft: 'frame-loom', size: { widthMm: 300, heightMm: 400 }, mode: 'straight-warp', hangs: 'turned', seed: 7,
+      loom: { nailPitchMm: 10, warping: 'zigzag', everyNthNail: 1, nailDiameterMm: 1.6, insideHeightMm: 900, insideWidthMm: 900 },
+      warp: { yarn: { tex: 400, label: 'Warp', colour: '#aabbcc' }, endsTogether: 1, parity: 'even', endCount: 62, tieMm: 150 },
+      beat: { picksPerCm: 6 },
+      allowances: { drawIn: 0.02, relaxation: 0.02, wetShrinkage: 0, topMm: 40, bottomMm: 60, tailMm: 50, loadMm: 8000, marginWeft: 0.15, marginWarp: 0.1 },
+      dowel: { diameterMm: 12, lengthMm: 380 },
+      yarns: { a: { metresPer100g: 180, strands: 1, ashenhurstK: 0.84, wrapsPerInch: 10.5, ball: { metres: 180, grams: 100 }, fibre: 'wool' }, b: { count: { text: '2/16', system: 'nm' } }, c: { class: 4, freeDiameterMm: 3 } },
+      bands: [
+        { technique: 'hem-stitch', yarn: 'a', bundleEnds: 2, reachPicks: 2 },
+        { technique: 'rya', name: 'fringe', yarn: 'a', strands: 3, legEnds: 1, pileMm: 100, trimMm: 10, rows: 1, heightMm: 6 },
+        { technique: 'tabby', name: 'dunes', yarn: 'a', heightMm: 120, shapes: [
+          { shape: 'triangle', yarn: 'b', baseMm: 50, heightMm: 50, centreMm: 60, bottomMm: 5, leanMm: 5, symmetric: false, join: 'slit' },
+          { shape: 'circle', yarn: 'b', radiusMm: 20, centreMm: 200, bottomMm: 10 }] },
+        { technique: 'soumak', yarn: 'a', over: 4, back: 2, rows: 2, tabbyBetween: 2, tabbyYarn: 'a' },
+        { technique: 'roving', yarn: 'a', over: 4, bulgeMm: 5, heightMm: 20, passes: 1 },
+        { technique: 'loop-pile', yarn: 'a', rodMm: 8, rows: 2, heightMm: 12 },
+        { technique: 'loop-pile', yarn: 'a', loopMm: 8, rows: 2, heightMm: 12 },
+        { technique: 'twining', yarn: 'c', rows: 1 },
+        { technique: 'tabby', yarn: 'a', fill: true },
+      ],
+    },
+  };
+  const SOUND = [FULL_PIECE, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
+
+  test('the fullest piece is answered', () => {
+    expect(reckon(FULL_PIECE)).toMatchObject({ ok: true });
+  });
+
+  /** Places of a question, as lists of keys. */
+  const placesOf = (value: Json, path: readonly string[] = []): readonly (readonly string[])[] => {
+    const below = Array.isArray(value) ? value.map((item, index) => [String(index), item as Json] as const) : isRecord(value) ? Object.entries(value) : [];
+    return [path, ...below.flatMap(([key, item]) => placesOf(item, [...path, key]))];
+  };
+  const atPlace = (value: Json, path: readonly string[]): Json => path.reduce<Json>((now, key) => (now as Readonly<Record<string, Json>>)[key] ?? null, value);
+  /** The question with one place changed; `undefined` takes it out. */
+  const changed = (value: Json, [key, ...rest]: readonly string[], to: Json | undefined): Json => {
+    if (key === undefined) return to ?? null;
+    if (Array.isArray(value)) return value.map((item: Json, index) => (String(index) === key ? changed(item, rest, to) : item));
+    const record = value as Readonly<Record<string, Json>>;
+    if (rest.length > 0) return { ...record, [key]: changed(record[key] ?? null, rest, to) };
+    const { [key]: _, ...others } = record;
+    return to === undefined ? others : { ...others, [key]: to };
+  };
+
+  /** Every limit that stands in the document. */
+  const LIMITS = [...new Set([...JSON.stringify(RECKON_DOCUMENT).matchAll(/"(?:exclusive)?(?:minimum|maximum|Minimum|Maximum)":(-?[\d.e+]+)/gu)].map(([, limit]) => Number(limit)))];
+  const OTHER_KINDS: readonly (Json | undefined)[] = [undefined, null, true, false, 'red', '', 12.5, [], {}, 'x'.repeat(200), ...new Set(LIMITS.flatMap((limit) => [limit - 1, limit, limit + 1]))];
+
+  /** Refusals of one value alone; that things do not go together is no matter of schemas. */
+  const WRONG_BY_ITSELF = /^(?!A soumak stitch).*: (?:between|anything above|from) .* works\.$|is missing|is not a number|must be a whole number|is not one we know|is not known here|must be a group|either true or false/u;
+
+  const agree = (question: Json): void => {
+    const { question: name } = SCHEMAS_OF[whatOf(question)];
+    const schemaRefuses = fits(name, question).length > 0;
+    const answer = reckon(question);
+    const readerRefuses = !answer.ok && answer.problems.some(({ message }) => WRONG_BY_ITSELF.test(message));
+    if (schemaRefuses) expect(answer.ok, `the schema refuses what is answered: ${JSON.stringify(fits(name, question))}`).toBe(false);
+    if (readerRefuses) expect(schemaRefuses, `the schema takes what is refused: ${JSON.stringify(answer.problems)}`).toBe(true);
+  };
+
+  test('refuse the same missing values, kinds and limits, at every place of a piece', () => {
+    for (const place of placesOf(FULL_PIECE).filter((path) => path.length > 0 && path.join() !== 'what')) {
+      for (const value of OTHER_KINDS) agree(changed(FULL_PIECE, place, value));
+    }
+  });
+
+  test('refuse the same in the short questions', () => {
+    fc.assert(
+      fc.property(fc.constantFrom(...SOUND.slice(1)), fc.nat(), fc.constantFrom(...OTHER_KINDS), (question, pick, value) => {
+        const places = placesOf(question).filter((path) => path.length > 0 && path.join() !== 'what');
+        agree(changed(question, places[pick % places.length] ?? ['what'], value));
+      }),
+      { numRuns: 2000, seed: 31 },
+    );
+  });
+
+  test('know no key that the other does not', () => {
+    for (const question of SOUND) {
+      for (const place of placesOf(question)) {
+        const value = atPlace(question, place);
+        if (!isRecord(value) || place.at(-1) === 'yarns') continue;
+        const more = changed(question, [...place, 'colourful'], 1);
+        expect(reckon(more).ok).toBe(false);
+        expect(fits(SCHEMAS_OF[whatOf(question)].question, more)).not.toEqual([]);
+      }
+    }
+  });
+});
