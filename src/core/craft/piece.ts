@@ -116,13 +116,23 @@ export interface Dowel {
   readonly lengthMm?: number;
 }
 
-export type ShapeKind = 'triangle' | 'rectangle' | 'circle';
+export type ShapeKind = 'triangle' | 'rectangle' | 'circle' | 'points';
 export type ShapeJoin = 'slit' | 'dovetail' | 'interlock';
 
-/** A triangle's base is its first row. */
+/** A corner of a shape drawn by points: to the right and upwards from wherever the shape counts from. */
+export interface ShapePoint {
+  readonly xMm: number;
+  readonly yMm: number;
+}
+
+/**
+ * A triangle's base is its first row. Points are the corners of a closed line, at least three; the box round them is what
+ * is placed, so where they count from does not matter. What the line goes round an even number of times lies outside.
+ */
 export type ShapeMeasures =
-  | { readonly shape: 'triangle' | 'rectangle'; readonly baseMm: number; readonly heightMm: number; readonly radiusMm?: never }
-  | { readonly shape: 'circle'; readonly radiusMm: number; readonly baseMm?: never; readonly heightMm?: never };
+  | { readonly shape: 'triangle' | 'rectangle'; readonly baseMm: number; readonly heightMm: number; readonly radiusMm?: never; readonly points?: never }
+  | { readonly shape: 'circle'; readonly radiusMm: number; readonly baseMm?: never; readonly heightMm?: never; readonly points?: never }
+  | { readonly shape: 'points'; readonly points: readonly ShapePoint[]; readonly baseMm?: never; readonly heightMm?: never; readonly radiusMm?: never };
 
 interface ShapePlacing {
   readonly yarn: string;
@@ -132,7 +142,7 @@ interface ShapePlacing {
   readonly bottomMm?: number;
   /** How far the top stands to the right (negative: left) of the base's middle. */
   readonly leanMm?: number;
-  /** Steps alike on both sides; true when missing, unless the shape leans. */
+  /** Steps alike on both sides; true when missing, unless the shape leans. Points say it themselves. */
   readonly symmetric?: boolean;
   /** How the colours meet; `slit` when missing. */
   readonly join?: ShapeJoin;

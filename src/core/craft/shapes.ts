@@ -1,5 +1,6 @@
 /** Shapes stepped out in whole ends and rows. */
-import type { ShapeMeasures } from '#core/craft/piece.ts';
+import type { ShapeKind, ShapeMeasures } from '#core/craft/piece.ts';
+import { areaOfPoints, boxOfPoints, runsOfPoints } from '#core/craft/points-shape.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 
 export interface ShapeGrid {
@@ -18,19 +19,30 @@ export interface SteppedShape {
 }
 
 export function heightOfShape(measures: ShapeMeasures): number {
+  if (measures.shape === 'points') return boxOfPoints(measures.points).heightMm;
   return measures.shape === 'circle' ? 2 * measures.radiusMm : measures.heightMm;
 }
 
 export function widthOfShape(measures: ShapeMeasures): number {
+  if (measures.shape === 'points') return boxOfPoints(measures.points).widthMm;
   return measures.shape === 'circle' ? 2 * measures.radiusMm : measures.baseMm;
 }
+
+const WIDTH_KEY = { triangle: 'baseMm', rectangle: 'baseMm', circle: 'radiusMm', points: 'points' } as const;
+const HEIGHT_KEY = { triangle: 'heightMm', rectangle: 'heightMm', circle: 'radiusMm', points: 'points' } as const;
+
+/** The measure that says how wide a shape is, and the one that says how high. */
+export const widthKeyOf = ({ shape }: ShapeMeasures): (typeof WIDTH_KEY)[ShapeKind] => WIDTH_KEY[shape];
+export const heightKeyOf = ({ shape }: ShapeMeasures): (typeof HEIGHT_KEY)[ShapeKind] => HEIGHT_KEY[shape];
 
 export function rowsOfShape(measures: ShapeMeasures, pickSpacingMm: number): number {
   return roundHalfUp(heightOfShape(measures) / pickSpacingMm);
 }
 
+type PlainMeasures = Exclude<ShapeMeasures, { readonly shape: 'points' }>;
+
 /** Width in ends, not yet whole, of row `row` (from 1) of `rows`. */
-function idealWidth(measures: ShapeMeasures, grid: ShapeGrid, row: number, rows: number): number {
+function idealWidth(measures: PlainMeasures, grid: ShapeGrid, row: number, rows: number): number {
   switch (measures.shape) {
     case 'rectangle':
       return measures.baseMm / grid.spacingMm;
@@ -50,9 +62,13 @@ function wholeWidth(ideal: number, grid: ShapeGrid): number {
   return Math.max(0, 2 * roundHalfUp((ideal - odd) / 2) + odd);
 }
 
-/** The ends of every row. The stepped area differs from the true one by at most half an end a row, one when symmetric. */
+/** The ends of every row; of points those of all its areas, the box's left edge in a gap. The stepped area differs from the true one by at most half an end a row, one when symmetric. */
 export function stepShape(measures: ShapeMeasures, grid: ShapeGrid): SteppedShape {
   const rows = rowsOfShape(measures, grid.pickSpacingMm);
+  if (measures.shape === 'points') {
+    const areas = runsOfPoints(measures.points, { ...grid, rows, leftEnds: () => 0 });
+    return { rows, widths: areas.map((runs) => runs.reduce((sum, { ends }) => sum + ends, 0)) };
+  }
   const widths = Array.from({ length: rows }, (_, index) => wholeWidth(idealWidth(measures, grid, index + 1, rows), grid));
   return { rows, widths };
 }
@@ -65,6 +81,8 @@ export function trueArea(measures: ShapeMeasures): number {
       return (measures.baseMm * measures.heightMm) / 2;
     case 'circle':
       return Math.PI * measures.radiusMm ** 2;
+    case 'points':
+      return areaOfPoints(measures.points);
   }
 }
 

@@ -47,6 +47,9 @@ interface TextOfProps {
   readonly words: { readonly name: string; readonly label: string; readonly hint: string | undefined; readonly error: string | undefined };
 }
 
+/** Characters of two hundred corners with their units. */
+const LONGEST_POINTS = 6000;
+
 function TextOf({ asked, name, text, words }: TextOfProps) {
   const { typed, type } = useHands();
   const isWords = asked.kind === 'text';
@@ -57,8 +60,8 @@ function TextOf({ asked, name, text, words }: TextOfProps) {
       value={text}
       unit={fieldUnit(asked, typed.units)}
       placeholder={standard}
-      maxLength={isWords ? asked.maxLength : 60}
-      inputMode={isWords ? undefined : 'decimal'}
+      maxLength={isWords ? asked.maxLength : asked.kind === 'points' ? LONGEST_POINTS : 60}
+      inputMode={isWords || asked.kind === 'points' ? undefined : 'decimal'}
       autoComplete="off"
       autoCapitalize={isWords ? undefined : 'off'}
       onChange={(event) => type(name, event.currentTarget.value)}

@@ -28,7 +28,7 @@ function ShapeRow({ shape: { texts }, band, at }: { readonly shape: TypedRow; re
     <fieldset className="shape" id={`shape-${String(band)}-${String(at)}`}>
       <legend className="label">Shape {at + 1}</legend>
       <div className="edit">
-        {[SHAPE, ...asked].map((one) => <AskedField key={one.key} asked={one} texts={texts} prefix={prefix} className={one.kind === 'choice' || one.kind === 'role' ? 'half' : 'third'} />)}
+        {[SHAPE, ...asked].map((one) => <AskedField key={one.key} asked={one} texts={texts} prefix={prefix} className={one.kind === 'points' ? 'whole' : one.kind === 'choice' || one.kind === 'role' ? 'half' : 'third'} />)}
         <p className="whole small quiet">{SHAPE_HINT}</p>
         <HiddenTexts texts={texts} prefix={prefix} shown={new Set(['shape', ...asked.map(({ key }) => key)])} />
         <p className="whole row between">

@@ -2,6 +2,7 @@
  * A piece seen from very near: few ends and few rows, so that every thread shows its plies. Not to scale; bands keep their
  * order and yarns, and what has no body near (edges, pile that would hide everything) is left out.
  */
+import { spansByRow } from '#core/craft/cloth/spans.ts';
 import { wovenHeightMm, type ClothBand, type TabbyBand, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 
 const WIDTH_MM = 400;
@@ -29,8 +30,8 @@ function nearTabby(band: TabbyBand, picks: number, ends: number): TabbyBand {
   const fewer = picks / band.picks;
   const narrower = ENDS / ends;
   const shapes = band.shapes.map((shape) => {
-    const byRow = new Map(shape.spans.map((span) => [Math.floor(span.row * fewer), span]));
-    return { ...shape, spans: [...byRow].map(([row, span]) => ({ row, from: span.from * narrower, to: span.to * narrower })) };
+    const near = new Map([...spansByRow(shape)].map(([row, spans]) => [Math.floor(row * fewer), spans]));
+    return { ...shape, spans: [...near].flatMap(([row, spans]) => spans.map((span) => ({ row, from: span.from * narrower, to: span.to * narrower }))) };
   });
   /* Near, a weft-faced cloth would show no warp at all: a little of it tells what is what. */
   return { ...band, heightMm: picks * ROW_MM, picks, shapes, cover: Math.min(band.cover, 0.7) };

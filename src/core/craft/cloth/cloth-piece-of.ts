@@ -109,6 +109,6 @@ function coverOf(yarn: Yarn | undefined, pickSpacingMm: number): number {
 
 /** The ends a shape takes in each pick, as its yarn was counted. */
 function spansOf(shape: Shape, grid: BandGrid): EndSpan[] {
-  const { firstRow, spans } = placeShape(shape, grid);
-  return spans.map((span, index) => ({ row: firstRow + index, from: span.start, to: span.start + span.ends })).filter((span) => span.to > span.from);
+  const { firstRow, rows } = placeShape(shape, grid);
+  return rows.flatMap((runs, index) => runs.map(({ start, ends }) => ({ row: firstRow + index, from: start, to: start + ends })));
 }

@@ -76,7 +76,7 @@ export interface ClothShape {
   readonly spans: readonly EndSpan[];
 }
 
-/** Ends `from` up to (not including) `to` in pick `row` (0 = the band's first). */
+/** Ends `from` up to (not including) `to` in pick `row` (0 = the band's first). A row may have several. */
 export interface EndSpan {
   readonly row: number;
   readonly from: number;

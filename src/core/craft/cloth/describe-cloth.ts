@@ -1,5 +1,6 @@
 /** The same cloth in words, for whoever does not see it. */
 import { wovenHeightMm, type ClothBand, type ClothPiece, type TabbyBand, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { spansByRow } from '#core/craft/cloth/spans.ts';
 import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -47,7 +48,9 @@ function shapesWord(band: TabbyBand): string {
 }
 
 function narrows(shape: TabbyBand['shapes'][number]): boolean {
-  const widths = shape.spans.map((span) => span.to - span.from);
+  const rows = [...spansByRow(shape).values()];
+  if (rows.some((spans) => spans.length > 1)) return false;
+  const widths = rows.map(([span]) => (span === undefined ? 0 : span.to - span.from));
   return widths.length > 1 && widths.every((width, row) => row === 0 || width <= (widths[row - 1] ?? width) + 1) && (widths.at(-1) ?? 0) < (widths[0] ?? 0);
 }
 

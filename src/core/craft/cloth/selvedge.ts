@@ -19,23 +19,34 @@ export function drawSelvedge(rows: readonly PickRow[], pitch: number, colour: st
 const touchesLeft = (row: PickRow): boolean => row.x0 === 0;
 const touchesRight = (row: PickRow, weave: Weave): boolean => weave.width - row.x1 < 0.5;
 
-/** A turn joins `row` and the next one at the right if the row is even, at the left if it is odd. */
-function turnsAt(row: PickRow, next: PickRow | undefined, pitch: number, weave: Weave): 'left' | 'right' | undefined {
-  if (next === undefined || next.y - row.y > pitch * 1.5) return undefined;
-  if (row.odd) return touchesLeft(row) && touchesLeft(next) ? 'left' : undefined;
-  return touchesRight(row, weave) && touchesRight(next, weave) ? 'right' : undefined;
+type Side = 'left' | 'right';
+
+interface Turn {
+  readonly side: Side;
+  /** From one row to the next. */
+  readonly y: number;
+  readonly nextY: number;
+}
+
+/** A turn joins a row and the next one at the right if the row is even, at the left if it is odd. Both must reach that edge. */
+function turnsOf(rows: readonly PickRow[], pitch: number, weave: Weave): Turn[] {
+  return (['left', 'right'] as const).flatMap((side) => {
+    const own = rows.filter((row) => (side === 'left' ? touchesLeft(row) : touchesRight(row, weave)));
+    return own.flatMap((row, index): Turn[] => {
+      const next = own[index + 1];
+      const turns = row.odd === (side === 'left') && next !== undefined && next.y - row.y <= pitch * 1.5;
+      return turns ? [{ side, y: row.y, nextY: next.y }] : [];
+    });
+  });
 }
 
 function arcs(rows: readonly PickRow[], pitch: number, out: number, colour: string, weave: Weave): string {
   let d = '';
-  rows.forEach((row, index) => {
-    const next = rows[index + 1];
-    const side = turnsAt(row, next, pitch, weave);
-    if (next === undefined || side === undefined) return;
-    const rise = next.y - row.y;
-    if (side === 'left') d += `M1 ${num(row.y)}h-1a${num(out)} ${num(rise / 2)} 0 0 0 0 ${num(rise)}h1`;
-    else d += `M${num(weave.width - 1)} ${num(row.y)}h1a${num(out)} ${num(rise / 2)} 0 0 1 0 ${num(rise)}h-1`;
-  });
+  for (const { side, y, nextY } of turnsOf(rows, pitch, weave)) {
+    const rise = nextY - y;
+    if (side === 'left') d += `M1 ${num(y)}h-1a${num(out)} ${num(rise / 2)} 0 0 0 0 ${num(rise)}h1`;
+    else d += `M${num(weave.width - 1)} ${num(y)}h1a${num(out)} ${num(rise / 2)} 0 0 1 0 ${num(rise)}h-1`;
+  }
   return weave.paths.stroke(d, shade(colour, 0.45), pitch * 0.8, ROUND) + weave.paths.stroke(d, shade(colour, 0.06), pitch * 0.54, ROUND);
 }
 
@@ -47,14 +58,12 @@ interface Edge {
 
 function fineTurns(rows: readonly PickRow[], pitch: number, out: number, colour: string, weave: Weave): string {
   const edges: Edge[] = [];
-  rows.forEach((row, index) => {
-    const side = turnsAt(row, rows[index + 1], pitch, weave);
-    if (side === undefined) return;
+  for (const { side, y } of turnsOf(rows, pitch, weave)) {
     const x = side === 'left' ? -out * 0.4 : weave.width + out * 0.4;
     const before = edges.findLast((edge) => edge.x === x);
-    if (before !== undefined && row.y - before.last < pitch * 2.5) before.last = row.y;
-    else edges.push({ x, first: row.y, last: row.y });
-  });
+    if (before !== undefined && y - before.last < pitch * 2.5) before.last = y;
+    else edges.push({ x, first: y, last: y });
+  }
   const turn = ROUND + dashes(pitch * 0.3, pitch * 1.7, 0);
   const d = edges.map((edge) => `M${num(edge.x)} ${num(edge.first + pitch * 0.35)}V${num(edge.last + pitch * 0.7)}`).join('');
   const drawn = weave.paths.stroke(d, shade(colour, 0.45), pitch * 0.8, turn);

@@ -27,16 +27,21 @@ function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
   return endCount !== undefined && asPinned ? { ...own, endCount } : own;
 }
 
+function narrowMeasures(shape: Shape, scale: number): Shape {
+  switch (shape.shape) {
+    case 'circle':
+      return { ...shape, radiusMm: shape.radiusMm * Math.min(1, scale) };
+    case 'points':
+      return { ...shape, points: shape.points.map(({ xMm, yMm }) => ({ xMm: xMm * scale, yMm })) };
+    default:
+      return { ...shape, baseMm: shape.baseMm * scale };
+  }
+}
+
 /** Shapes keep their place and their share of the width; how high they stand stays, but a circle stays round. */
 function narrowShape(shape: Shape, scale: number): Shape {
-  const measures =
-    shape.shape === 'circle'
-      ? { shape: shape.shape, radiusMm: shape.radiusMm * Math.min(1, scale) }
-      : { shape: shape.shape, baseMm: shape.baseMm * scale, heightMm: shape.heightMm };
-  const { baseMm: _base, heightMm: _height, radiusMm: _radius, shape: _shape, ...placing } = shape;
   return {
-    ...placing,
-    ...measures,
+    ...narrowMeasures(shape, scale),
     ...(shape.centreMm === undefined ? {} : { centreMm: shape.centreMm * scale }),
     ...(shape.leanMm === undefined ? {} : { leanMm: shape.leanMm * scale }),
   };

@@ -80,7 +80,7 @@ export const BAND_KEYS: readonly string[] = [
 
 export const SHAPE: Asked = {
   key: 'shape', kind: 'choice', label: 'Shape', needed: true,
-  options: [option('triangle', 'Triangle'), option('rectangle', 'Rectangle'), option('circle', 'Circle')],
+  options: [option('triangle', 'Triangle'), option('rectangle', 'Rectangle'), option('circle', 'Circle'), option('points', 'Drawn by points')],
 };
 export const JOIN: Asked = {
   key: 'join', kind: 'choice', label: 'Colours meet',
@@ -103,9 +103,17 @@ const UPRIGHT: readonly Asked[] = [
 ];
 const ROUND: readonly Asked[] = [{ key: 'radiusMm', kind: 'length', label: 'Radius', called: 'Radius of the circle', needed: true }];
 
+const CORNERS: readonly Asked[] = [
+  {
+    key: 'points', kind: 'points', label: 'Points', called: 'Points of the shape', needed: true,
+    hint: 'Corner after corner, how far across and how far up: 0 : 0; 12 : 0; 6 : 9.',
+  },
+];
+
 export const SHAPE_HINT = 'Its middle counts from the left selvedge, its foot from the band’s first row. A lean of 2 puts the top to the right, of −2 to the left.';
 
 /** Measures and place of a shape of this kind. */
-export const shapeFields = (kind: string): readonly Asked[] => [yarn, ...(kind === 'circle' ? ROUND : UPRIGHT), ...PLACING, LEAN, SYMMETRIC, JOIN];
+export const shapeFields = (kind: string): readonly Asked[] =>
+  kind === 'points' ? [yarn, ...CORNERS, ...PLACING, LEAN, JOIN] : [yarn, ...(kind === 'circle' ? ROUND : UPRIGHT), ...PLACING, LEAN, SYMMETRIC, JOIN];
 
-export const SHAPE_KEYS: readonly string[] = ['shape', 'yarn', 'radiusMm', ...shapeFields('triangle').map(({ key }) => key)].filter((key, index, all) => all.indexOf(key) === index);
+export const SHAPE_KEYS: readonly string[] = [...new Set(['shape', ...['triangle', 'circle', 'points'].flatMap((kind) => shapeFields(kind).map(({ key }) => key))])];

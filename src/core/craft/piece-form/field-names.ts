@@ -96,7 +96,8 @@ export function fieldOfPlace(pointer: string, typed: TypedPiece): string {
   }
   if (first === 'warp' && role === 'yarn') return yarnField(WARP_YARN, rest);
   if (first === 'beat') return role === 'picksPerCm' || (role !== undefined && textOf(typed.texts, 'beat.by') === 'own') ? `beat.${role}` : 'beat.by';
-  const name = segments.join('.');
+  /* All corners of a shape are one field. */
+  const name = segments.join('.').replace(/(\.shapes\.\d+\.points)\..*$/, '$1');
   return name.endsWith(`.${FILL_KEY}`) ? `${name.slice(0, -FILL_KEY.length)}heightMm` : name;
 }
 

@@ -2,12 +2,13 @@
  * Between a value of the piece and the text of its field. Nothing is lost by looking at a piece: a length that has no
  * plain text in the person's units is written with a unit of its own, and every text reads back to the very same number.
  */
+import type { ShapePoint } from '#core/craft/piece.ts';
 import { MM_PER_INCH, inchesText, toInches } from '#core/units/inches.ts';
 import { parseLength, type LengthUnit } from '#core/units/parse-length.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 
-export type ReadText = { readonly ok: true; readonly value: string | number | boolean } | { readonly ok: false; readonly says: string };
+export type ReadText = { readonly ok: true; readonly value: string | number | boolean | readonly ShapePoint[] } | { readonly ok: false; readonly says: string };
 const no = (says: string): ReadText => ({ ok: false, says });
 
 type LengthKind = 'length' | 'fine' | 'yarn' | 'lean';
@@ -27,6 +28,8 @@ export function fieldUnit(asked: Asked, units: Units): string | undefined {
     case 'fine':
     case 'yarn':
       return UNIT_OF[asked.kind][units];
+    case 'points':
+      return UNIT_OF.lean[units];
     case 'share':
       return '%';
     case 'number':
@@ -50,6 +53,9 @@ function lengthFieldText(mm: number, unit: LengthUnit): string {
   return ways.find(says) ?? `${String(mm)} mm`;
 }
 
+/** A length that may be below 0. */
+const leanText = (mm: number, units: Units): string => `${mm < 0 ? '−' : ''}${lengthFieldText(Math.abs(mm), UNIT_OF.lean[units])}`;
+
 /** Without the tail of nines or noughts that a division leaves. */
 const decimalText = (value: number): string => String(Number(value.toPrecision(12)));
 
@@ -68,6 +74,7 @@ export function shiftPoint(text: string, places: number): string {
 export function fieldText(value: unknown, asked: Asked, units: Units): string {
   if (asked.kind === 'choice') return asked.options.find((option) => option.value === value)?.text ?? '';
   if (typeof value === 'string') return asked.kind === 'text' ? value : '';
+  if (Array.isArray(value)) return asked.kind === 'points' ? value.map((point: ShapePoint) => `${leanText(point.xMm, units)} : ${leanText(point.yMm, units)}`).join('; ') : '';
   if (typeof value !== 'number') return '';
   switch (asked.kind) {
     case 'length':
@@ -75,7 +82,7 @@ export function fieldText(value: unknown, asked: Asked, units: Units): string {
     case 'yarn':
       return lengthFieldText(value, UNIT_OF[asked.kind][units]);
     case 'lean':
-      return `${value < 0 ? '−' : ''}${lengthFieldText(Math.abs(value), UNIT_OF.lean[units])}`;
+      return leanText(value, units);
     case 'share':
       return shiftPoint(String(value), 2);
     default:
@@ -98,11 +105,24 @@ function readShare(text: string): ReadText {
   return { ok: true, value: plain.startsWith('-') ? -size : size };
 }
 
-function readLength(text: string, kind: LengthKind, units: Units): ReadText {
+function readLength(text: string, kind: LengthKind, units: Units): { readonly ok: true; readonly value: number } | (ReadText & { readonly ok: false }) {
   const below = kind === 'lean' && /^[-−]/.test(text);
-  const read = parseLength(below ? text.slice(1) : text, UNIT_OF[kind][units]);
-  if (!read.ok) return no(read.reason);
+  const read = parseLength(below ? text.slice(1).trimStart() : text, UNIT_OF[kind][units]);
+  if (!read.ok) return { ok: false, says: read.reason };
   return { ok: true, value: below && read.mm !== 0 ? -read.mm : read.mm };
+}
+
+function readPoints(text: string, units: Units): ReadText {
+  const points: ShapePoint[] = [];
+  for (const pair of text.split(';').map((part) => part.trim()).filter((part) => part !== '')) {
+    const [across = '', up = '', ...more] = pair.split(':').map((part) => part.trim());
+    if (across === '' || up === '' || more.length > 0) return no(`“${pair.slice(0, 40)}” is no point. Write how far across, a colon, how far up: 12 : 4.5.`);
+    const [x, y] = [readLength(across, 'lean', units), readLength(up, 'lean', units)];
+    if (!x.ok) return x;
+    if (!y.ok) return y;
+    points.push({ xMm: x.value, yMm: y.value });
+  }
+  return { ok: true, value: points };
 }
 
 /** Reads a text that is not empty. The sentence, when it cannot be read, is for the person who typed it. */
@@ -114,6 +134,8 @@ export function readText(typed: string, asked: Asked, units: Units): ReadText {
     case 'yarn':
     case 'lean':
       return readLength(text, asked.kind, units);
+    case 'points':
+      return readPoints(text, units);
     case 'share':
       return readShare(text);
     case 'number': {

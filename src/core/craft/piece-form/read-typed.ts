@@ -6,7 +6,7 @@ import type { Asked } from './asked.ts';
 import { BAND_NAME, bandFields, FILL_KEY, SHAPE, shapeFields, TECHNIQUE } from './asked-of-band.ts';
 import { ASKED_ONCE, BEAT_BY, FIRMNESS, HANGING, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
 import { ASHENHURST, BALL, BY, gristAsked, ROLE, WRAPS, YARN_TRAITS } from './asked-of-yarn.ts';
-import { missingSays, readText } from './field-text.ts';
+import { missingSays, readText, type ReadText } from './field-text.ts';
 import { textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } from './typed-piece.ts';
 
 /** What cannot be read of a field, by the name of the field (`field-names.ts`). */
@@ -34,7 +34,7 @@ class Reading {
     if (!this.faults.has(field)) this.faults.set(field, { says, kind });
   }
 
-  value(texts: Texts, asked: Asked, prefix: string): string | number | boolean | undefined {
+  value(texts: Texts, asked: Asked, prefix: string): (ReadText & { readonly ok: true })['value'] | undefined {
     const text = textOf(texts, asked.key);
     const field = `${prefix}${asked.key}`;
     if (text.trim() === '') {

@@ -2,7 +2,8 @@
 import type { ColourArea } from '#core/craft/colour-areas.ts';
 import type { Shape, ShapeJoin } from '#core/craft/piece.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
-import { stepShape } from '#core/craft/shapes.ts';
+import { runsOfPoints, type EndRun } from '#core/craft/points-shape.ts';
+import { rowsOfShape, stepShape, widthOfShape } from '#core/craft/shapes.ts';
 
 export interface BandGrid {
   readonly rows: number;
@@ -14,18 +15,13 @@ export interface BandGrid {
   readonly widthMm: number;
 }
 
-/** A run of ends in one row. */
-export interface Span {
-  readonly start: number;
-  readonly ends: number;
-}
-
-/** A shape stepped out and set in its place: one span a row, in the band's own rows. */
+/** A shape stepped out and set in its place, in the band's own rows. */
 export interface PlacedShape {
   readonly yarn: string;
   readonly join: ShapeJoin;
   readonly firstRow: number;
-  readonly spans: readonly Span[];
+  /** Its areas in each row, left to right. A row may have none, and one drawn by points several. */
+  readonly rows: readonly (readonly EndRun[])[];
 }
 
 /** Steps alike on both sides, unless asked otherwise or leaning. */
@@ -40,15 +36,34 @@ export function centreInEnds(shape: Shape, grid: Pick<BandGrid, 'ends' | 'widthM
 
 export function placeShape(shape: Shape, grid: BandGrid): PlacedShape {
   const firstRow = roundHalfUp((shape.bottomMm ?? 0) / grid.pickSpacingMm);
+  const all = shape.shape === 'points' ? pointRows(shape, grid) : evenRows(shape, grid);
+  return { yarn: shape.yarn, join: shape.join ?? 'slit', firstRow, rows: all.slice(0, Math.max(0, grid.rows - firstRow)) };
+}
+
+const leanInEnds = (shape: Shape, grid: BandGrid): number => (shape.leanMm ?? 0) / grid.spacingMm;
+
+/** One area a row, about a middle that moves as the shape leans. */
+function evenRows(shape: Shape, grid: BandGrid): EndRun[][] {
   const { widths } = stepShape(shape, { ...grid, symmetric: isSymmetric(shape) });
   const centre = centreInEnds(shape, grid);
-  const leanEnds = (shape.leanMm ?? 0) / grid.spacingMm;
-  const spans = widths.slice(0, Math.max(0, grid.rows - firstRow)).map((width, index) => {
+  return widths.map((width, index) => {
     const ends = Math.min(width, grid.ends);
-    const middle = centre + (leanEnds * (index + 0.5)) / widths.length;
-    return { start: Math.min(grid.ends - ends, Math.max(0, roundHalfUp(middle - ends / 2))), ends };
+    const middle = centre + (leanInEnds(shape, grid) * (index + 0.5)) / widths.length;
+    return ends === 0 ? [] : [{ start: Math.min(grid.ends - ends, Math.max(0, roundHalfUp(middle - ends / 2))), ends }];
   });
-  return { yarn: shape.yarn, join: shape.join ?? 'slit', firstRow, spans };
+}
+
+/** The points' box about the shape's middle; what half an end of rounding puts over a selvedge is cut off there. */
+function pointRows(shape: Shape & { readonly shape: 'points' }, grid: BandGrid): EndRun[][] {
+  const left = centreInEnds(shape, grid) - widthOfShape(shape) / grid.spacingMm / 2;
+  const lean = leanInEnds(shape, grid);
+  const rows = runsOfPoints(shape.points, { ...grid, rows: rowsOfShape(shape, grid.pickSpacingMm), leftEnds: (share) => left + lean * share });
+  return rows.map((runs) =>
+    runs.flatMap(({ start, ends }) => {
+      const [from, to] = [Math.max(0, start), Math.min(grid.ends, start + ends)];
+      return to > from ? [{ start: from, ends: to - from }] : [];
+    }),
+  );
 }
 
 /** A stretch of a row in one yarn; `layer` 0 is the ground, later shapes lie over earlier ones. */
@@ -61,7 +76,6 @@ interface Stretch {
 }
 
 function layOver(stretches: readonly Stretch[], top: Stretch): Stretch[] {
-  if (top.end <= top.start) return [...stretches];
   const beside = stretches.flatMap((under) => [
     { ...under, end: Math.min(under.end, top.start) },
     { ...under, start: Math.max(under.start, top.end) },
@@ -81,11 +95,11 @@ export interface YarnArea extends ColourArea {
 /** The colour areas of one row (from 0), left to right. */
 export function areasOfRow(row: number, ground: string, shapes: readonly PlacedShape[], ends: number): readonly YarnArea[] {
   const bare: Stretch = { start: 0, end: ends, yarn: ground, layer: 0, join: 'slit' };
-  const stretches = shapes.reduce<readonly Stretch[]>((laid, { yarn, join, firstRow, spans }, index) => {
-    const span = spans[row - firstRow];
-    if (span === undefined) return laid;
-    return layOver(laid, { start: span.start, end: span.start + span.ends, yarn, layer: index + 1, join });
-  }, [bare]);
+  const stretches = shapes.reduce<readonly Stretch[]>(
+    (laid, { yarn, join, firstRow, rows }, index) =>
+      (rows[row - firstRow] ?? []).reduce<readonly Stretch[]>((under, { start, ends: wide }) => layOver(under, { start, end: start + wide, yarn, layer: index + 1, join }), laid),
+    [bare],
+  );
   return stretches.map((stretch, index) => {
     const before = stretches[index - 1];
     const after = stretches[index + 1];
@@ -98,18 +112,15 @@ export function areasOfRow(row: number, ground: string, shapes: readonly PlacedS
   });
 }
 
-/** The most rows in which a slit at one side of the shape stays between the same two ends. */
-export function longestSlitRows({ spans }: PlacedShape): number {
+/** The most rows in which a slit beside the shape stays between the same two ends. A selvedge is no slit. */
+export function longestSlitRows({ rows }: Pick<PlacedShape, 'rows'>, ends: number): number {
   let longest = 0;
-  for (const edgeOf of [(span: Span) => span.start, (span: Span) => span.start + span.ends]) {
-    let run = 0;
-    let before: number | undefined;
-    for (const span of spans) {
-      const edge = span.ends === 0 ? undefined : edgeOf(span);
-      run = edge !== undefined && edge === before ? run + 1 : 1;
-      before = edge;
-      if (edge !== undefined) longest = Math.max(longest, run);
-    }
+  let before: ReadonlyMap<number, number> = new Map();
+  for (const runs of rows) {
+    const gaps = runs.flatMap(({ start, ends: wide }) => [start, start + wide]).filter((gap) => gap > 0 && gap < ends);
+    const now = new Map(gaps.map((gap) => [gap, (before.get(gap) ?? 0) + 1]));
+    longest = Math.max(longest, ...now.values());
+    before = now;
   }
   return longest;
 }

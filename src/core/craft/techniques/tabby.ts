@@ -2,10 +2,11 @@
 import { areaLength } from '#core/craft/colour-areas.ts';
 import { LONGEST_SLIT_MM } from '#core/craft/defaults.ts';
 import type { BandHeight, Shape, TabbyBand } from '#core/craft/piece.ts';
+import { boxOfPoints } from '#core/craft/points-shape.ts';
 import { picksInHeight, pickLength } from '#core/craft/picks.ts';
 import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
 import { below } from '#core/craft/reading/findings.ts';
-import { heightOfShape, widthOfShape } from '#core/craft/shapes.ts';
+import { heightKeyOf, heightOfShape, widthKeyOf, widthOfShape } from '#core/craft/shapes.ts';
 import {
   areasOfRow,
   centreInEnds,
@@ -55,24 +56,33 @@ function gridOf(band: TabbyBand, heightMm: number, loom: DressedLoom): BandGrid 
 }
 
 /** Half an end beyond the selvedge is still inside: ends are whole. */
-function liesInside(middleEnds: number, widthEnds: number, ends: number): boolean {
-  return middleEnds - widthEnds / 2 >= -0.5 - 1e-9 && middleEnds + widthEnds / 2 <= ends + 0.5 + 1e-9;
+function liesInside(places: readonly number[], ends: number): boolean {
+  return places.every((place) => place >= -0.5 - 1e-9 && place <= ends + 0.5 + 1e-9);
+}
+
+/** Where the corners of a shape stand across the cloth, in ends from the left selvedge, when it leans so far. */
+function cornersAcross(shape: Shape, leanEnds: number, grid: BandGrid): number[] {
+  const centre = centreInEnds(shape, grid);
+  const half = widthOfShape(shape) / grid.spacingMm / 2;
+  if (shape.shape !== 'points') {
+    const top = shape.shape === 'triangle' ? 0 : half;
+    return [centre - half, centre + half, centre + leanEnds - top, centre + leanEnds + top];
+  }
+  const box = boxOfPoints(shape.points);
+  return shape.points.map(({ xMm, yMm }) => centre - half + (xMm - box.leftMm) / grid.spacingMm + (leanEnds * (yMm - box.bottomMm)) / box.heightMm);
 }
 
 function fitsAcross(shape: Shape, key: string, grid: BandGrid, report: BandReport): boolean {
   const widthEnds = widthOfShape(shape) / grid.spacingMm;
-  const centre = centreInEnds(shape, grid);
-  const top = centre + (shape.leanMm ?? 0) / grid.spacingMm;
   if (widthEnds > grid.ends + 0.5) {
-    const widthKey = shape.shape === 'circle' ? 'radiusMm' : 'baseMm';
-    report.reject('E_FIT', `${key}/${widthKey}`, `The shape is wider than the cloth, which takes ${report.length(grid.ends * grid.spacingMm)}.`);
+    report.reject('E_FIT', `${key}/${widthKeyOf(shape)}`, `The shape is wider than the cloth, which takes ${report.length(grid.ends * grid.spacingMm)}.`);
     return false;
   }
-  if (!liesInside(centre, widthEnds, grid.ends)) {
+  if (!liesInside(cornersAcross(shape, 0, grid), grid.ends)) {
     report.reject('E_FIT', `${key}/centreMm`, 'The shape runs out over the selvedge. Move its middle inwards, or make it narrower.');
     return false;
   }
-  if (!liesInside(top, shape.shape === 'triangle' ? 0 : widthEnds, grid.ends)) {
+  if (!liesInside(cornersAcross(shape, (shape.leanMm ?? 0) / grid.spacingMm, grid), grid.ends)) {
     report.reject('E_FIT', `${key}/leanMm`, 'The shape leans out over the selvedge. Let it lean less.');
     return false;
   }
@@ -82,8 +92,7 @@ function fitsAcross(shape: Shape, key: string, grid: BandGrid, report: BandRepor
 function fitsUpright(shape: Shape, key: string, heightMm: number, report: BandReport): boolean {
   const roomMm = Math.max(0, heightMm - (shape.bottomMm ?? 0));
   if (heightOfShape(shape) <= roomMm + CLOSE_ENOUGH_MM) return true;
-  const ownKey = shape.shape === 'circle' ? 'radiusMm' : 'heightMm';
-  const which = shape.bottomMm === undefined ? ownKey : 'bottomMm';
+  const which = shape.bottomMm === undefined ? heightKeyOf(shape) : 'bottomMm';
   report.reject('E_FIT', `${key}/${which}`, `The shape is higher than its band: from its foot to the band’s end there are ${report.length(roomMm)}.`);
   return false;
 }
@@ -94,7 +103,7 @@ function fitsIn(shape: Shape, key: string, heightMm: number, grid: BandGrid, rep
 
 function warnOfSlit(shape: Shape, key: string, grid: BandGrid, report: BandReport): void {
   if ((shape.join ?? 'slit') !== 'slit') return;
-  const slitMm = longestSlitRows(placeShape(shape, grid)) * grid.pickSpacingMm;
+  const slitMm = longestSlitRows(placeShape(shape, grid), grid.ends) * grid.pickSpacingMm;
   if (slitMm > LONGEST_SLIT_MM) {
     report.warn('W_SLIT', `${key}/join`, `The slit at its side is ${report.length(slitMm)} long. Sew it when the piece is off the loom, or join the colours.`);
   }
@@ -117,7 +126,7 @@ function check(band: TabbyBand, heightMm: number, loom: DressedLoom, report: Ban
 /** The rows that shapes may stand in; all others are the ground from edge to edge. */
 function rowsWithShapes(shapes: readonly PlacedShape[], rows: number): { readonly first: number; readonly end: number } {
   const first = Math.min(rows, ...shapes.map(({ firstRow }) => firstRow));
-  const end = Math.max(first, ...shapes.map(({ firstRow, spans }) => Math.min(rows, firstRow + spans.length)));
+  const end = Math.max(first, ...shapes.map(({ firstRow, rows: own }) => Math.min(rows, firstRow + own.length)));
   return { first, end };
 }
 

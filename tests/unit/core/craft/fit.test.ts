@@ -83,6 +83,7 @@ describe('her own way of making it', () => {
           shapes: [
             { shape: 'triangle', yarn: 'ground', baseMm: 200, heightMm: 60, centreMm: 150, leanMm: 30 },
             { shape: 'circle', yarn: 'ground', radiusMm: 50, bottomMm: 10, centreMm: 100 },
+            { shape: 'points', yarn: 'ground', points: [{ xMm: 0, yMm: 0 }, { xMm: 80, yMm: 10 }, { xMm: 20, yMm: 60 }], centreMm: 200 },
           ],
         },
         { technique: 'twining', yarn: 'ground', rows: 1 },
@@ -94,11 +95,12 @@ describe('her own way of making it', () => {
       shapes: [
         { shape: 'triangle', baseMm: 100, heightMm: 60, centreMm: 75, leanMm: 15 },
         { shape: 'circle', radiusMm: 25, bottomMm: 10, centreMm: 50 },
+        { shape: 'points', points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 10 }, { xMm: 10, yMm: 60 }], centreMm: 100 },
       ],
     });
     expect(piece.dowel).toEqual({ diameterMm: 12, lengthMm: 230 });
     const wider = fitted({ widthMm: 400, loom: { insideHeightMm: 600 } }, shaped).piece.bands[0];
-    expect(wider).toMatchObject({ shapes: [{ baseMm: 200 * (400 / 300) }, { radiusMm: 50 }] });
+    expect(wider).toMatchObject({ shapes: [{ baseMm: 200 * (400 / 300) }, { radiusMm: 50 }, { points: [{ xMm: 0, yMm: 0 }, { xMm: 80 * (400 / 300), yMm: 10 }, { yMm: 60 }] }] });
   });
 
   test('her yarn takes the role, and the pattern’s colour where she has not said her own', () => {

@@ -139,6 +139,7 @@ describe('shapes in tabby', () => {
     bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 100, shapes }, ...PLAIN_PIECE.bands],
   });
   const triangle = { shape: 'triangle', yarn: 'red', baseMm: 150, heightMm: 90, join: 'slit' } as const;
+  const star = { shape: 'points', yarn: 'red', points: [{ xMm: 0, yMm: 0 }, { xMm: 80, yMm: 0 }, { xMm: 80, yMm: 60 }, { xMm: 40, yMm: 20 }, { xMm: 0, yMm: 60 }] } as const;
   const yarnOf = (piece: unknown, role: string): number => planOf(piece).bands[0]?.yarnMm[role] ?? 0;
 
   test.each([
@@ -154,10 +155,32 @@ describe('shapes in tabby', () => {
     [{ ...triangle, symmetric: 'yes' }, 'E_ENUM /bands/0/shapes/0/symmetric'],
     [{ ...triangle, join: 'glue' }, 'E_ENUM /bands/0/shapes/0/join'],
     [{ ...triangle, radiusMm: 3 }, 'E_ENUM /bands/0/shapes/0/radiusMm'],
+    [{ ...star, points: [{ xMm: 0, yMm: 0 }, { xMm: 400, yMm: 0 }, { xMm: 0, yMm: 50 }] }, 'E_FIT /bands/0/shapes/0/points'],
+    [{ ...star, points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 0 }, { xMm: 0, yMm: 150 }] }, 'E_FIT /bands/0/shapes/0/points'],
+    [{ ...star, points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 20 }] }, 'E_RANGE /bands/0/shapes/0/points'],
+    [{ ...star, points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 20 }, { xMm: 60, yMm: 30 }] }, 'E_RANGE /bands/0/shapes/0/points'],
+    [{ ...star, points: [] }, 'E_ENUM /bands/0/shapes/0/points'],
+    [{ ...star, points: [{ xMm: 0, yMm: 0 }, { xMm: '40', yMm: 0 }, { xMm: 0, yMm: 50 }] }, 'E_NUM /bands/0/shapes/0/points/1/xMm'],
+    [{ ...star, centreMm: 20 }, 'E_FIT /bands/0/shapes/0/centreMm'],
+    [{ ...star, leanMm: 200 }, 'E_FIT /bands/0/shapes/0/leanMm'],
+    [{ ...star, symmetric: true }, 'E_ENUM /bands/0/shapes/0/symmetric'],
+    [{ ...star, baseMm: 5 }, 'E_ENUM /bands/0/shapes/0/baseMm'],
     [{ shape: 'star', yarn: 'red' }, 'E_ENUM /bands/0/shapes/0/shape'],
     [{ shape: 'circle', yarn: 'red' }, 'E_NUM /bands/0/shapes/0/radiusMm'],
   ])('%j is refused', (shape, refusal) => {
     expect(refusals(shaped(shape))).toEqual([refusal]);
+  });
+
+  test('drawn by points in the outline of a rectangle they take the very yarn of a rectangle', () => {
+    const rectangle = shaped({ shape: 'rectangle', yarn: 'red', baseMm: 100, heightMm: 60, symmetric: false, centreMm: 150 });
+    const points = shaped({ shape: 'points', yarn: 'red', points: [{ xMm: 7, yMm: -5 }, { xMm: 107, yMm: -5 }, { xMm: 107, yMm: 55 }, { xMm: 7, yMm: 55 }], centreMm: 150 });
+    for (const role of ['ground', 'red']) expect(yarnOf(points, role)).toBeCloseTo(yarnOf(rectangle, role), 6);
+  });
+
+  test('with two horns they turn four times in a row where the horns stand, so a row of horns takes more than its ends', () => {
+    const horns = planOf(shaped(star)).bands[0];
+    expect(horns?.yarnMm['red']).toBeGreaterThan(0);
+    expect((horns?.yarnMm['red'] ?? 0) + (horns?.yarnMm['ground'] ?? 0)).toBeGreaterThan(yarnOf(shaped(), 'ground') * 0.97);
   });
 
   test('too many of them are refused, none is as good as an empty list', () => {

@@ -25,6 +25,7 @@ const RYA = {
 };
 const TRIANGLE = { what: 'shape', shape: 'triangle', baseMm: 150, heightMm: 100, spacingMm: 5, pickSpacingMm: 1.4456241, ends: 62, symmetric: true };
 const CIRCLE = { what: 'shape', shape: 'circle', radiusMm: 60, spacingMm: 5, pickSpacingMm: 1.5, ends: 62, symmetric: false };
+const POINTS = { what: 'shape', shape: 'points', points: [{ xMm: 0, yMm: 0 }, { xMm: 100, yMm: 0 }, { xMm: 100, yMm: 60 }, { xMm: 50, yMm: 20 }, { xMm: 0, yMm: 60 }], spacingMm: 5, pickSpacingMm: 2, ends: 62 };
 const LENGTH = { what: 'length-text', mm: 138.1125, system: 'imperial', round: 'nearest' };
 const PIECE = { what: 'piece', piece: PLAIN_PIECE };
 
@@ -36,6 +37,7 @@ describe('each question is answered with exactly what it promises', () => {
     [RYA, ['bundleMm', 'wrapMm', 'cutMm', 'knotsPerRow', 'strands', 'yarnMm', 'cardMm', 'cardExactMm']],
     [TRIANGLE, ['rows', 'widths', 'endsTotal', 'areaMm2', 'trueAreaMm2']],
     [CIRCLE, ['rows', 'widths', 'endsTotal', 'areaMm2', 'trueAreaMm2']],
+    [POINTS, ['rows', 'widths', 'areas', 'endsTotal', 'areaMm2', 'trueAreaMm2']],
     [LENGTH, ['text']],
     [PIECE, ['ends', 'loom', 'weft', 'warp', 'yarns', 'bands', 'cut', 'massG', 'hours', 'warnings']],
   ])('$what', (question, keys) => {
@@ -43,7 +45,7 @@ describe('each question is answered with exactly what it promises', () => {
   });
 
   test('in values that can be written as JSON and come back the same', () => {
-    for (const question of [YARN, TAKE_UP, SOUMAK, RYA, TRIANGLE, CIRCLE, LENGTH, PIECE]) {
+    for (const question of [YARN, TAKE_UP, SOUMAK, RYA, TRIANGLE, CIRCLE, POINTS, LENGTH, PIECE]) {
       const answer = answerTo(question);
       expect(JSON.parse(JSON.stringify(answer))).toEqual(answer);
     }
@@ -83,7 +85,7 @@ describe('what a question leaves out or gets wrong', () => {
     },
   );
 
-  test.each([YARN, TAKE_UP, SOUMAK, RYA, TRIANGLE, CIRCLE, LENGTH, PIECE])('a key nobody knows is refused: %j', (question) => {
+  test.each([YARN, TAKE_UP, SOUMAK, RYA, TRIANGLE, CIRCLE, POINTS, LENGTH, PIECE])('a key nobody knows is refused: %j', (question) => {
     expect(refusals({ ...question, colour: 'red' })).toEqual(['E_ENUM /colour']);
   });
 
@@ -117,6 +119,8 @@ describe('what is impossible', () => {
     [{ ...RYA, pileMm: 1, trimMm: 0, cardThicknessMm: 100 }, 'E_FIT /cardThicknessMm'],
     [{ ...TRIANGLE, baseMm: 320 }, 'E_FIT /baseMm'],
     [{ ...CIRCLE, radiusMm: 160 }, 'E_FIT /radiusMm'],
+    [{ ...POINTS, ends: 18 }, 'E_FIT /points'],
+    [{ ...POINTS, symmetric: true }, 'E_ENUM /symmetric'],
     [{ ...TRIANGLE, heightMm: 20_000, pickSpacingMm: 0.1 }, 'E_RANGE /pickSpacingMm'],
     [{ ...TRIANGLE, radiusMm: 5 }, 'E_ENUM /radiusMm'],
     [{ ...TAKE_UP, warpSpacingMm: 2 }, 'E_JAM /warpSpacingMm'],

@@ -3,6 +3,7 @@ import type { ClothShape, TabbyBand } from '#core/craft/cloth/cloth-piece.ts';
 import { shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds, strokeEnds } from '#core/craft/cloth/ends.ts';
 import { box, num } from '#core/craft/cloth/markup.ts';
+import { spansByRow } from '#core/craft/cloth/spans.ts';
 import { drawPicks, rowsOver, type PickRow } from '#core/craft/cloth/picks.ts';
 import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
 import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
@@ -34,19 +35,19 @@ const STEPS = 20;
 
 /** The shape's rows on the screen: spans snapped to two drawn ends, rows gathered into steps. */
 function shapeRows(shape: ClothShape, band: TabbyBand, count: number, pitch: number, weave: Weave): PickRow[] {
-  const spans = new Map(shape.spans.map((span) => [span.row, span]));
+  const spans = spansByRow(shape);
   const every = Math.max(1, Math.round(count / STEPS));
   const rows: PickRow[] = [];
   for (let row = 0; row < count; row++) {
     const woven = weave.begin === 'head' ? row : count - 1 - row;
     const step = Math.floor(woven / every) * every;
-    const span = spans.get(Math.floor(((step + every / 2) / count) * band.picks));
-    if (span === undefined) continue;
-    const a = snap(span.from, weave);
-    const b = snap(span.to, weave);
-    if (b - a < 2 * weave.end) continue;
-    const turned = weave.begin === 'head';
-    rows.push({ y: (row + 0.5) * pitch, odd: row % 2 === 1, x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
+    for (const span of spans.get(Math.floor(((step + every / 2) / count) * band.picks)) ?? []) {
+      const a = snap(span.from, weave);
+      const b = snap(span.to, weave);
+      if (b - a < 2 * weave.end) continue;
+      const turned = weave.begin === 'head';
+      rows.push({ y: (row + 0.5) * pitch, odd: row % 2 === 1, x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
+    }
   }
   return rows;
 }

@@ -18,6 +18,12 @@ describe('a cloth in words', () => {
     expect(describeCloth(piece, { woven: 1 })).not.toContain('Woven so far');
   });
 
+  it('calls what has two horns a shape, not a wedge', () => {
+    const spans = [{ row: 0, from: 0, to: 20 }, { row: 1, from: 0, to: 8 }, { row: 1, from: 12, to: 20 }, { row: 2, from: 0, to: 4 }, { row: 2, from: 16, to: 20 }];
+    const horns = { ...WEDGES, shapes: [{ colour: '#cdbb94', yarn: 'Dry Sand', spans }] };
+    expect(describeCloth(wovenPiece({ bands: [horns] }))).toContain('16\u00a0cm of shapes in Slack Water and Dry Sand');
+  });
+
   it('speaks in inches with fractions when asked', () => {
     expect(describeCloth(piece, { units: 'in' })).toContain('15\u20093/4\u00a0in wide');
   });

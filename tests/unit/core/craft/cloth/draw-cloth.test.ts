@@ -96,6 +96,20 @@ describe('a cloth that is still growing', () => {
   });
 });
 
+describe('a shape of several areas in a row', () => {
+  it('is drawn with all of them, and turns at both selvedges', () => {
+    const spans = Array.from({ length: 8 }, (_, row) => [{ row, from: 0, to: 20 }, { row, from: 46, to: 66 }]).flat();
+    const band = { ...WEDGES, heightMm: 60, picks: 8, shapes: [{ colour: '#7d854f', yarn: 'Samphire', spans }] };
+    const svg = drawCloth(wovenPiece({ bands: [band] }), { id: 'a', as: 'swatch', width: 660, height: 90 });
+    const kept = new RegExp(`href="#([^"]+)" stroke="${shade('#7d854f', 0.6)}"`).exec(svg)?.[1] ?? '';
+    const stretches = new RegExp(`id="${kept}" d="([^"]+)"`).exec(svg)?.[1] ?? '';
+    expect(stretches.match(/M/g)).toHaveLength(16);
+    const arcs = new RegExp(`id="([^"]+)" d="(M1 [^"]*a[^"]*)"`).exec(svg)?.[2] ?? '';
+    expect(arcs.match(/M1 /g)).toHaveLength(3);
+    expect(arcs.match(/M659 /g)).toHaveLength(4);
+  });
+});
+
 describe('the ways up of a cloth', () => {
   const hanging: ClothView = { id: 'a', as: 'hanging', width: 400 };
   const px = (400 - 24) / 400;

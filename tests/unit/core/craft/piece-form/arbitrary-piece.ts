@@ -31,13 +31,15 @@ const yarn: fc.Arbitrary<Yarn> = fc.tuple(grist, fc.record({
 })).map(([thick, traits]): Yarn => ({ ...present(traits), ...thick }));
 
 const shapeOf = (role: fc.Arbitrary<string>): fc.Arbitrary<Shape> => {
+  const either = fc.oneof(mm, mm.map((length) => -length));
   const placing = fc.record({
-    yarn: role, centreMm: perhaps(mm), bottomMm: perhaps(mm), leanMm: perhaps(fc.oneof(mm, mm.map((length) => -length))),
+    yarn: role, centreMm: perhaps(mm), bottomMm: perhaps(mm), leanMm: perhaps(either),
     symmetric: perhaps(fc.boolean()), join: perhaps(fc.constantFrom('slit', 'dovetail', 'interlock')),
   }).map(({ yarn: own, ...rest }) => ({ yarn: own, ...present(rest) }));
   return fc.oneof(
     fc.tuple(placing, fc.constantFrom('triangle', 'rectangle'), mm, mm).map(([at, shape, baseMm, heightMm]): Shape => ({ ...at, shape, baseMm, heightMm })),
     fc.tuple(placing, mm).map(([at, radiusMm]): Shape => ({ ...at, shape: 'circle', radiusMm })),
+    fc.tuple(placing, fc.array(fc.record({ xMm: either, yMm: either }), { minLength: 3, maxLength: 6 })).map(([{ symmetric: _, ...at }, points]): Shape => ({ ...at, shape: 'points', points })),
   );
 };
 

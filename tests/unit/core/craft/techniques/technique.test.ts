@@ -53,14 +53,19 @@ describe('colours in a row', () => {
   });
 
   test('leave a slit as tall as an upright side, and a short one along a slope', () => {
-    expect(longestSlitRows(block(150, 100))).toBe(10);
+    expect(longestSlitRows(block(150, 100), 60)).toBe(10);
     const slope = placeShape({ shape: 'triangle', yarn: 'red', baseMm: 200, heightMm: 40, symmetric: false }, grid);
-    expect(longestSlitRows(slope)).toBeLessThan(3);
-    expect(longestSlitRows({ yarn: 'red', join: 'slit', firstRow: 0, spans: [{ start: 30, ends: 0 }] })).toBe(0);
+    expect(longestSlitRows(slope, 60)).toBeLessThan(3);
+    expect(longestSlitRows({ rows: [[]] }, 60)).toBe(0);
+  });
+
+  test('a shape along a selvedge has one slit, on its inner side', () => {
+    expect(longestSlitRows(block(50, 100), 60)).toBe(10);
+    expect(longestSlitRows(block(150, 300), 60)).toBe(0);
   });
 
   test('of a shape that runs out of its band end with the band', () => {
-    const { spans } = placeShape({ shape: 'rectangle', yarn: 'red', baseMm: 50, heightMm: 40, bottomMm: 30 }, grid);
-    expect(spans).toHaveLength(5);
+    const { rows } = placeShape({ shape: 'rectangle', yarn: 'red', baseMm: 50, heightMm: 40, bottomMm: 30 }, grid);
+    expect(rows).toHaveLength(5);
   });
 });

@@ -1,0 +1,112 @@
+/**
+ * A shape drawn by points: where its rows cross it.
+ *
+ * The rule. Row j (from 0) is held against the level (j + ½)·pick above the lowest point: the middle of the row. What lies
+ * inside on that level, by the even-odd rule, is its areas; there may be several. Their edges go to the nearest gap between
+ * two ends, half up, so an end belongs to the shape when its middle lies in it. Corners need not go one way about, sides
+ * may cross, and two shapes that share a side share out the ends between them: none twice, none left out.
+ */
+import type { ShapePoint } from '#core/craft/piece.ts';
+import { roundHalfUp } from '#core/craft/rounding.ts';
+
+/** The smallest box round the points, mm. */
+export interface PointsBox {
+  readonly leftMm: number;
+  readonly bottomMm: number;
+  readonly widthMm: number;
+  readonly heightMm: number;
+}
+
+export function boxOfPoints(points: readonly ShapePoint[]): PointsBox {
+  const xs = points.map(({ xMm }) => xMm);
+  const ys = points.map(({ yMm }) => yMm);
+  const leftMm = Math.min(...xs);
+  const bottomMm = Math.min(...ys);
+  return { leftMm, bottomMm, widthMm: Math.max(...xs) - leftMm, heightMm: Math.max(...ys) - bottomMm };
+}
+
+/** Sides from corner to corner, the last one back to the first. */
+function sidesOf(points: readonly ShapePoint[]): (readonly [ShapePoint, ShapePoint])[] {
+  return points.flatMap((from, index) => {
+    const to = points[(index + 1) % points.length];
+    return to === undefined ? [] : [[from, to] as const];
+  });
+}
+
+/**
+ * Where the level `yMm` runs into the shape and out of it again, from the left: in, out, in, out. A side counts from its
+ * lower corner up to, not including, its upper one, so that a corner is never met twice.
+ */
+export function crossingsAt(points: readonly ShapePoint[], yMm: number): number[] {
+  const found = sidesOf(points).flatMap(([a, b]) => {
+    const [low, high] = a.yMm <= b.yMm ? [a, b] : [b, a];
+    if (yMm < low.yMm || yMm >= high.yMm) return [];
+    return [low.xMm + ((yMm - low.yMm) / (high.yMm - low.yMm)) * (high.xMm - low.xMm)];
+  });
+  return found.sort((a, b) => a - b);
+}
+
+/** A run of ends, from the left selvedge. */
+export interface EndRun {
+  readonly start: number;
+  readonly ends: number;
+}
+
+export interface PointsGrid {
+  readonly rows: number;
+  readonly spacingMm: number;
+  readonly pickSpacingMm: number;
+  /** Where the left edge of the points' box stands at a share (0 at its foot, 1 at its head) of the shape's height, in ends. */
+  readonly leftEnds: (share: number) => number;
+}
+
+/** The areas of every row, left to right; a row may have none. Areas that touch are one. */
+export function runsOfPoints(points: readonly ShapePoint[], grid: PointsGrid): EndRun[][] {
+  const box = boxOfPoints(points);
+  return Array.from({ length: grid.rows }, (_, row) => {
+    const level = (row + 0.5) * grid.pickSpacingMm;
+    const left = grid.leftEnds(level / box.heightMm);
+    const edges = crossingsAt(points, box.bottomMm + level).map((xMm) => roundHalfUp(left + (xMm - box.leftMm) / grid.spacingMm));
+    return joinRuns(edges);
+  });
+}
+
+function joinRuns(edges: readonly number[]): EndRun[] {
+  const runs: EndRun[] = [];
+  for (let i = 0; i + 1 < edges.length; i += 2) {
+    const start = edges[i] ?? 0;
+    const ends = (edges[i + 1] ?? start) - start;
+    if (ends <= 0) continue;
+    const before = runs.at(-1);
+    if (before !== undefined && before.start + before.ends === start) runs[runs.length - 1] = { start: before.start, ends: before.ends + ends };
+    else runs.push({ start, ends });
+  }
+  return runs;
+}
+
+/** True area by the even-odd rule, mm². Between two levels where sides begin, end or cross, widths change evenly. */
+export function areaOfPoints(points: readonly ShapePoint[]): number {
+  const levels = [...new Set([...points.map(({ yMm }) => yMm), ...crossingLevels(points)])].sort((a, b) => a - b);
+  return levels.reduce((area, level, index) => {
+    const next = levels[index + 1];
+    if (next === undefined) return area;
+    const edges = crossingsAt(points, (level + next) / 2);
+    const inside = edges.reduce((sum, x, at) => sum + (at % 2 === 0 ? -x : x), 0);
+    return area + inside * (next - level);
+  }, 0);
+}
+
+/** Levels at which two sides cross each other. */
+function crossingLevels(points: readonly ShapePoint[]): number[] {
+  const sides = sidesOf(points);
+  return sides.flatMap(([a, b], index) =>
+    sides.slice(index + 1).flatMap(([c, d]) => {
+      const [ux, uy, vx, vy] = [b.xMm - a.xMm, b.yMm - a.yMm, d.xMm - c.xMm, d.yMm - c.yMm];
+      const turn = ux * vy - uy * vx;
+      if (turn === 0) return [];
+      const along = ((c.xMm - a.xMm) * vy - (c.yMm - a.yMm) * vx) / turn;
+      const across = ((c.xMm - a.xMm) * uy - (c.yMm - a.yMm) * ux) / turn;
+      return along > 0 && along < 1 && across > 0 && across < 1 ? [a.yMm + along * uy] : [];
+    }),
+  );
+}
