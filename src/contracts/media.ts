@@ -12,12 +12,18 @@ export interface MediaFile {
   readonly height?: number;
 }
 
-/** Renditions by name: photos have `large` and `thumb`; videos `video`, `captions` and `poster`. */
+/** From the first byte of an upload to what people see; a photo is `ready` at once. */
+export const MEDIA_STATES = ['created', 'uploaded', 'probing', 'processing', 'ready', 'failed'] as const;
+export type MediaState = (typeof MEDIA_STATES)[number];
+
+/** Renditions by name: photos have `large` and `thumb`; videos `video` and stills, any of which may be the poster. */
 export type MediaFiles = Readonly<Record<string, MediaFile>>;
 
 /** What is told of a file besides its bytes: `alt` of a picture, chapters and cues of a video. */
 export interface MediaDetail {
   readonly alt?: string;
+  /** Name of the rendition that stands for a video before it plays; `poster` when not said. */
+  readonly poster?: string;
   readonly chapters?: readonly Chapter[];
   readonly cues?: readonly Cue[];
 }
@@ -29,6 +35,9 @@ export interface SeriesMediaFile {
   readonly name: string;
   readonly title: string;
   readonly publicId: string;
+  readonly durationMs: number | null;
   readonly files: MediaFiles;
   readonly detail: MediaDetail;
+  /** Whether `detail` is its teacher's draft, which students do not see yet. */
+  readonly isDraft: boolean;
 }

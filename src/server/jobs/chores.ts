@@ -3,6 +3,7 @@ import { sessionAdapter } from '#server/auth/lucia.ts';
 import type { WorkerOptions } from '#server/jobs/worker.ts';
 import { lookAtOldOrders } from '#server/use-cases/checkout/look-at-old-orders.ts';
 import { forgetOldLinks } from '#server/use-cases/people/forget-old-links.ts';
+import { lookAfterUploads } from '#server/use-cases/videos/look-after-uploads.ts';
 import { forgetOldCounters } from '#server/web/rate-limit.ts';
 
 const HOUR = 3_600;
@@ -10,6 +11,7 @@ const FIVE_MINUTES = 300;
 
 export const CHORES: WorkerOptions['chores'] = [
   { everySeconds: FIVE_MINUTES, run: lookAtOldOrders },
+  { everySeconds: FIVE_MINUTES, run: lookAfterUploads },
   { everySeconds: HOUR, run: () => sessionAdapter.deleteExpiredSessions() },
   { everySeconds: HOUR, run: forgetOldLinks },
   { everySeconds: HOUR, run: () => forgetOldCounters() },

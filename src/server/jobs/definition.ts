@@ -7,8 +7,10 @@ export interface JobDefinition<P> {
   readonly maxAttempts: number;
   /** Seconds to wait before each further try; the last one holds for all later tries. */
   readonly backoffSeconds: readonly number[];
+  /** Takes minutes or hours: done one at a time beside the quick ones, held by a lease that is renewed while it goes on. */
+  readonly isLong: boolean;
 }
 
-export function defineJob<P>(definition: Omit<JobDefinition<P>, 'maxAttempts' | 'backoffSeconds'> & Partial<JobDefinition<P>>): JobDefinition<P> {
-  return { maxAttempts: 8, backoffSeconds: [2, 10, 60, 300, 1_800], ...definition };
+export function defineJob<P>(definition: Omit<JobDefinition<P>, 'maxAttempts' | 'backoffSeconds' | 'isLong'> & Partial<JobDefinition<P>>): JobDefinition<P> {
+  return { maxAttempts: 8, backoffSeconds: [2, 10, 60, 300, 1_800], isLong: false, ...definition };
 }

@@ -16,8 +16,10 @@ export interface MediaStore {
   remove(key: string): Promise<void>;
   /** A fresh path for a file in the making. */
   temporaryPath(name: string): Promise<string>;
-  /** Throws UNAVAILABLE when the disk is too full to take more. */
-  requireRoom(): Promise<void>;
+  /** The folder in which files in the making of one kind lie, made when it is missing. */
+  temporaryFolder(kind: string): Promise<string>;
+  /** Throws UNAVAILABLE when the disk is too full to take `byteCount` more. */
+  requireRoom(byteCount?: number): Promise<void>;
 }
 
 const KEY = /^[a-z0-9]+(?:\/[a-z0-9][a-z0-9.-]*)+$/;
@@ -56,15 +58,19 @@ export class DiskMediaStore implements MediaStore {
   }
 
   async temporaryPath(name: string): Promise<string> {
-    const folder = join(this.#folder, 'temporary');
-    await mkdir(folder, { recursive: true });
-    return join(folder, name);
+    return join(await this.temporaryFolder(''), name);
   }
 
-  async requireRoom(): Promise<void> {
+  async temporaryFolder(kind: string): Promise<string> {
+    const folder = join(this.#folder, 'temporary', kind);
+    await mkdir(folder, { recursive: true });
+    return folder;
+  }
+
+  async requireRoom(byteCount = 0): Promise<void> {
     await mkdir(this.#folder, { recursive: true });
     const { bavail, blocks, bsize } = await statfs(this.#folder);
-    const free = bavail * bsize;
+    const free = bavail * bsize - byteCount;
     if (free < LEAST_FREE_BYTES || free < blocks * bsize * LEAST_FREE_SHARE) {
       throw new AppError('UNAVAILABLE', { says: 'There is no room for more files just now. Nothing of yours is lost; try again in an hour.', retryAfterSeconds: 3_600 });
     }

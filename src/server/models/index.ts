@@ -21,5 +21,7 @@ export { SeriesMedia } from './series-media.ts';
 export { Session } from './session.ts';
 export { Tick } from './tick.ts';
 export { User } from './user.ts';
+export { VideoPlace } from './video-place.ts';
+export { VideoUpload } from './video-upload.ts';
 export { Workroom } from './workroom.ts';
 export { WorkroomHelper } from './workroom-helper.ts';

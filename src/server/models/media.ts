@@ -1,7 +1,7 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { id, json, maybeRef, maybeText, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
+import { count, id, json, maybeJson, maybeRef, maybeText, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import type { MediaDetail, MediaFiles } from '#contracts/media.ts';
+import { MEDIA_STATES, type MediaDetail, type MediaFiles, type MediaState } from '#contracts/media.ts';
 
 /** A file of a person: its renditions are in the uploads folder, its right to be seen follows from what uses it. */
 export class Media extends Model<InferAttributes<Media>, InferCreationAttributes<Media>> {
@@ -9,7 +9,7 @@ export class Media extends Model<InferAttributes<Media>, InferCreationAttributes
   declare publicId: CreationOptional<string>;
   declare ownerId: number;
   declare kind: 'photo' | 'video' | 'picture';
-  declare state: CreationOptional<'created' | 'processing' | 'ready' | 'failed'>;
+  declare state: CreationOptional<MediaState>;
   declare originalName: string;
   declare byteCount: CreationOptional<number>;
   declare width: CreationOptional<number | null>;
@@ -17,6 +17,12 @@ export class Media extends Model<InferAttributes<Media>, InferCreationAttributes
   declare durationMs: CreationOptional<number | null>;
   declare files: MediaFiles;
   declare detail: MediaDetail;
+  /** What its teacher changed of `detail` since it was published; null when nothing. */
+  declare draftDetail: CreationOptional<MediaDetail | null>;
+  /** Rises with every change of the draft, so that two windows notice each other. */
+  declare revision: CreationOptional<number>;
+  /** How much of a video is made ready, in thousandths. */
+  declare progressPermille: CreationOptional<number>;
   declare failure: CreationOptional<string | null>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
@@ -27,7 +33,7 @@ Media.init({
   publicId: publicId(),
   ownerId: ref(),
   kind: oneOf(['photo', 'video', 'picture']),
-  state: oneOf(['created', 'processing', 'ready', 'failed'], 'created'),
+  state: oneOf(MEDIA_STATES, 'created'),
   originalName: text(120),
   byteCount: { type: DataTypes.BIGINT, allowNull: false, defaultValue: 0 },
   width: maybeRef(),
@@ -35,6 +41,9 @@ Media.init({
   durationMs: maybeRef(),
   files: json(),
   detail: json(),
+  draftDetail: maybeJson(),
+  revision: count(),
+  progressPermille: count(),
   failure: maybeText(200),
   createdAt: moment(),
   updatedAt: moment(),

@@ -33,6 +33,8 @@ export const RATE_RULES = {
   spendLink: { name: 'spend-link', limit: 60, windowSeconds: 3_600 },
   checkout: { name: 'checkout', limit: 10, windowSeconds: 3_600 },
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
+  /** Videos begun by one teacher. */
+  video: { name: 'video', limit: 60, windowSeconds: 3_600 },
   /** Texts read while they are being written, and drafts kept by themselves, of one teacher. */
   lessonCheck: { name: 'lesson-check', limit: 120, windowSeconds: 60 },
   lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },

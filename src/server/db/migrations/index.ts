@@ -7,6 +7,7 @@ import { createMedia } from './0004-create-media.ts';
 import { createSeats } from './0005-create-seats.ts';
 import { createProgress } from './0006-create-progress.ts';
 import { createQueues } from './0007-create-queues.ts';
+import { createVideos } from './0008-create-videos.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -16,4 +17,5 @@ export const migrations: readonly Migration[] = [
   createSeats,
   createProgress,
   createQueues,
+  createVideos,
 ];

@@ -23,7 +23,7 @@ function sources(source: string, extra: Partial<SceneSources> = {}): SceneSource
 
 const file = { key: 'x/y', contentType: 'video/mp4', byteCount: 1 };
 const video: SeriesMediaFile = {
-  kind: 'video',
+  kind: 'video', durationMs: 60_000, isDraft: false,
   name: 'dress-the-loom',
   title: 'Dress the loom',
   publicId: 'v'.repeat(26),
