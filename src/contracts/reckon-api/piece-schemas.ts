@@ -15,19 +15,27 @@ function band(description: string, technique: string, properties: Readonly<Recor
 }
 
 export const MEASURES = {
-  shape: choice('A triangle’s base is its first row.', 'triangle', 'rectangle', 'circle'),
+  shape: choice('A triangle’s base is its first row.', 'triangle', 'rectangle', 'circle', 'points'),
   baseMm: lengthMm('Of a triangle or rectangle.'),
   heightMm: lengthMm('Of a triangle or rectangle.'),
   radiusMm: lengthMm('Of a circle.', LONGEST_MM / 2),
+  points: list('Corners of a closed line, one after the other; what it goes round an even number of times lies outside. The box round them is placed.', ref('ShapePoint'), { minItems: 3, maxItems: 200 }),
 } as const;
 
-/** Which measures belong to which shape. */
-export const MEASURES_OF_SHAPE: Schema = {
+const across = { min: -LONGEST_MM, max: LONGEST_MM };
+const ShapePoint = closed('A corner, counted from anywhere.', { xMm: number('To the right.', across), yMm: number('Upwards, as it is woven.', across) });
+
+/** The measures a shape may be given by; each kind has its own. */
+export const MEASURE_KEYS = ['baseMm', 'heightMm', 'radiusMm', 'points'] as const;
+
+/** Which measures belong to which shape. Points say themselves how alike their sides are: `symmetric` can only be what `asDrawn` takes. */
+export const measuresOfShape = (asDrawn: Schema | false, needed: readonly string[] = []): Schema => ({
   oneOf: [
-    { properties: { shape: { enum: ['triangle', 'rectangle'] }, radiusMm: false }, required: ['baseMm', 'heightMm'] },
-    { properties: { shape: { const: 'circle' }, baseMm: false, heightMm: false }, required: ['radiusMm'] },
+    { properties: { shape: { enum: ['triangle', 'rectangle'] }, radiusMm: false, points: false }, required: ['baseMm', 'heightMm', ...needed] },
+    { properties: { shape: { const: 'circle' }, baseMm: false, heightMm: false, points: false }, required: ['radiusMm', ...needed] },
+    { properties: { shape: { const: 'points' }, baseMm: false, heightMm: false, radiusMm: false, symmetric: asDrawn }, required: ['points'] },
   ],
-};
+});
 
 const BANDS: Readonly<Record<string, Schema>> = {
   TabbyBand: band(
@@ -102,8 +110,8 @@ const Shape = closed(
     symmetric: flag('Steps alike on both sides; true when missing, unless it leans.'),
     join: choice('How colours meet; `slit` when missing.', 'slit', 'dovetail', 'interlock'),
   },
-  ['baseMm', 'heightMm', 'radiusMm', 'centreMm', 'bottomMm', 'leanMm', 'symmetric', 'join'],
-  MEASURES_OF_SHAPE,
+  [...MEASURE_KEYS, 'centreMm', 'bottomMm', 'leanMm', 'symmetric', 'join'],
+  measuresOfShape(false),
 );
 
 const Loom = closed(
@@ -150,6 +158,7 @@ export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
     discriminator: { propertyName: 'technique', mapping: Object.fromEntries(Object.entries(BAND_OF).map(([technique, name]) => [technique, `#/components/schemas/${name}`])) },
   },
   Shape,
+  ShapePoint,
   Loom,
   Warp,
   Piece: closed(

@@ -1,5 +1,5 @@
 /** The short questions and their answers. */
-import { lengthMm, MEASURES, MEASURES_OF_SHAPE } from '#contracts/reckon-api/piece-schemas.ts';
+import { lengthMm, MEASURES, measuresOfShape, MEASURE_KEYS } from '#contracts/reckon-api/piece-schemas.ts';
 import { choice, closed, flag, list, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
 
 const ends = whole('Working ends, doubled ones counted once.', { min: 2, max: 2000 });
@@ -73,18 +73,20 @@ export const QUESTION_SCHEMAS: Readonly<Record<string, Schema>> = {
       spacingMm,
       pickSpacingMm: lengthMm('From row to row.'),
       ends: { ...ends, description: 'Working ends of the whole cloth.' },
-      symmetric: flag('Steps alike on both sides.'),
+      symmetric: flag('Steps alike on both sides; of points only false, or left out.'),
     },
-    ['baseMm', 'heightMm', 'radiusMm'],
-    MEASURES_OF_SHAPE,
+    [...MEASURE_KEYS, 'symmetric'],
+    measuresOfShape({ const: false }, ['symmetric']),
   ),
   ShapeAnswer: closed('The shape as it can be woven.', {
     rows: whole('Rows.', { min: 0 }),
     widths: list('Ends in each row, from the first.', whole('Ends.', { min: 0 })),
+    areas: list('Of points: each row’s areas from the left.', list('Areas.', ref('EndRun'))),
     endsTotal: whole('Of all rows.', { min: 0 }),
     areaMm2: number('Of the stepped shape.'),
     trueAreaMm2: number('Of the shape as it was asked.'),
-  }),
+  }, ['areas']),
+  EndRun: closed('Ends side by side.', { start: whole('From the left edge of the box round the points.', { min: 0 }), ends: whole('How many.', { min: 1 }) }),
   LengthTextQuestion: closed('A length as makers write it.', {
     what: { const: 'length-text' },
     mm: number('The length.', { min: 0, max: 1e9 }),

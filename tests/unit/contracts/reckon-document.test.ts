@@ -83,7 +83,8 @@ describe('reader and schemas', () => {
         { technique: 'rya', name: 'fringe', yarn: 'a', strands: 3, legEnds: 1, pileMm: 100, trimMm: 10, rows: 1, heightMm: 6 },
         { technique: 'tabby', name: 'dunes', yarn: 'a', heightMm: 120, shapes: [
           { shape: 'triangle', yarn: 'b', baseMm: 50, heightMm: 50, centreMm: 60, bottomMm: 5, leanMm: 5, symmetric: false, join: 'slit' },
-          { shape: 'circle', yarn: 'b', radiusMm: 20, centreMm: 200, bottomMm: 10 }] },
+          { shape: 'circle', yarn: 'b', radiusMm: 20, centreMm: 200, bottomMm: 10 },
+          { shape: 'points', yarn: 'b', points: [{ xMm: 0, yMm: -4 }, { xMm: 40, yMm: 0 }, { xMm: 20, yMm: 30 }], centreMm: 250 }] },
         { technique: 'soumak', yarn: 'a', over: 4, back: 2, rows: 2, tabbyBetween: 2, tabbyYarn: 'a' },
         { technique: 'roving', yarn: 'a', over: 4, bulgeMm: 5, heightMm: 20, passes: 1 },
         { technique: 'loop-pile', yarn: 'a', rodMm: 8, rows: 2, heightMm: 12 },
@@ -93,7 +94,8 @@ describe('reader and schemas', () => {
       ],
     },
   };
-  const SOUND = [FULL_PIECE, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
+  const POINTS = { what: 'shape', shape: 'points', points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 0 }, { xMm: 20, yMm: 30 }], spacingMm: 5, pickSpacingMm: 2, ends: 62, symmetric: false };
+  const SOUND = [FULL_PIECE, POINTS, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
 
   test('the fullest piece is answered', () => {
     expect(reckon(FULL_PIECE)).toMatchObject({ ok: true });
