@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { TOP_FOR_TYING_MM } from '#core/craft/defaults.ts';
 import { dowelLength } from '#core/craft/hanging.ts';
 import { topAllowance } from '#core/craft/loom-height.ts';
-import { endsOnNails, endsPerMm, nailsOnRail, workingSpacing } from '#core/craft/nails.ts';
+import { endsOnNails, nailsOnRail } from '#core/craft/nails.ts';
 import { adviseSpacing } from '#core/craft/sett.ts';
 import { rovingDiameter } from '#core/craft/yarn/roving.ts';
 import { YARN_CLASSES } from '#core/craft/yarn/classes.ts';
@@ -16,6 +16,16 @@ const QUARTER = INCH / 4;
 const HALF = INCH / 2;
 const COMMON_WARP_MM = 0.8;
 
+/** What the reckoning warns of when the ground of the worked piece is this yarn, with ends so far apart. */
+function warnedOf(spacingMm: number, ground: object): readonly string[] {
+  const { warnings } = planOf({
+    ...workedPiece,
+    loom: { ...workedPiece.loom, nailPitchMm: 2 * spacingMm },
+    yarns: { ...workedPiece.yarns, A: ground },
+  });
+  return warnings.filter(({ path }) => path === '/yarns/A').map(({ code }) => code);
+}
+
 /** Thickness of a class in the middle of its wraps. */
 const loftOf = (number: number): number => {
   const range = YARN_CLASSES[number]?.wrapsPerInch ?? { min: 1, max: 1 };
@@ -25,25 +35,34 @@ const loftOf = (number: number): number => {
 describe('spacing', () => {
   test.each([5, 6])('class %i is too thick for ends a quarter inch apart, and suits half an inch', (number) => {
     expect(adviseSpacing(QUARTER, COMMON_WARP_MM, loftOf(number))).toBe('too-thick');
+    expect(warnedOf(QUARTER, { class: number })).toContain('W_THICK');
+    expect(warnedOf(HALF, { class: number })).not.toContain('W_THICK');
     expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('suits');
   });
 
   test('roving is too thick for a quarter inch', () => {
     expect(adviseSpacing(QUARTER, COMMON_WARP_MM, rovingDiameter(4000))).toBe('too-thick');
+    expect(warnedOf(QUARTER, { tex: 4000, freeDiameterMm: rovingDiameter(4000) })).toContain('W_WARP_SHOWS');
   });
 
   test.each([1, 2])('class %i by itself is too thin for half an inch', (number) => {
     expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('too-thin');
+    expect(warnedOf(HALF, { class: number })).toContain('W_LOOSE');
+    expect(warnedOf(QUARTER, { class: number })).not.toContain('W_THICK');
     expect(adviseSpacing(QUARTER, COMMON_WARP_MM, loftOf(number))).not.toBe('too-thick');
   });
 
-  test('ends a quarter inch apart become half an inch by doubling them, and by warping every second nail', () => {
-    const all = { pitchMm: HALF, warping: 'zigzag' } as const;
-    const inner = { pitchMm: INCH, warping: 'zigzag' } as const;
-    expect(workingSpacing(all, 1)).toBeCloseTo(QUARTER, 12);
-    expect(workingSpacing(all, 2)).toBeCloseTo(HALF, 12);
-    expect(workingSpacing(inner, 1)).toBeCloseTo(HALF, 12);
-    expect(endsPerMm(inner)).toBeCloseTo(endsPerMm(all) / 2, 12);
+  test('C2: ends a quarter inch apart become half an inch by doubling them, and by warping the inner nails only', () => {
+    const loom = { ...workedPiece.loom, kind: 'two-row-frame', nailPitchMm: INCH } as const;
+    const all = planOf({ ...workedPiece, loom }).ends;
+    const doubled = planOf({ ...workedPiece, loom, warp: { ...workedPiece.warp, endsTogether: 2 } }).ends;
+    const inner = planOf({ ...workedPiece, loom: { ...loom, nailRows: 'inner' } }).ends;
+    expect(all.spacingMm).toBeCloseTo(QUARTER, 12);
+    for (const { spacingMm, working } of [doubled, inner]) {
+      expect(spacingMm).toBeCloseTo(HALF, 12);
+      expect(working).toBe(all.working / 2);
+    }
+    expect(inner.nailsTop).toBeLessThanOrEqual(all.nailsTop / 2 + 1);
   });
 
   test('a yarn too thin for its ends warns, and stops warning when strands are taken together', () => {

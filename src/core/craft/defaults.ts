@@ -50,6 +50,8 @@ export const TIE_MM = 150;
 export const NAIL_DIAMETER_MM = 1.6;
 /** P: rail beyond the first and the last nail, each. */
 export const RAIL_MARGIN_MM = 20;
+/** P: rows of twining or scrap at each edge that set zigzag ends even. */
+export const SPACING_ROWS = { fewest: 3, most: 4 } as const;
 /** P: the spacer card is this much wider than the warp. */
 export const SPACER_CARD_EXTRA_MM = 20;
 

@@ -17,12 +17,12 @@ export function topForDowel(dowelDiameterMm: number): number {
 }
 
 /** Unwoven warp at the top: what was asked, what the dowel takes, and room for the last shed. */
-export function topAllowance(askedMm: number, dowelDiameterMm: number | undefined): number {
+export function topAllowance(askedMm: number, dowelDiameterMm: number | undefined, leastMm: number = DEFAULT_ALLOWANCES.topMm): number {
   const dowelMm = dowelDiameterMm === undefined ? 0 : topForDowel(dowelDiameterMm);
-  return Math.max(askedMm, dowelMm, DEFAULT_ALLOWANCES.topMm);
+  return Math.max(askedMm, dowelMm, leastMm);
 }
 
 /** Unwoven warp at the bottom: what was asked, and enough to knot or tuck the ends. */
-export function bottomAllowance(askedMm: number): number {
-  return Math.max(askedMm, DEFAULT_ALLOWANCES.bottomMm);
+export function bottomAllowance(askedMm: number, leastMm: number = DEFAULT_ALLOWANCES.bottomMm): number {
+  return Math.max(askedMm, leastMm);
 }

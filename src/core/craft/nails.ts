@@ -1,5 +1,5 @@
 /** From nails along a rail to warp ends and back. */
-import { RAIL_MARGIN_MM } from '#core/craft/defaults.ts';
+import { RAIL_MARGIN_MM, SPACING_ROWS } from '#core/craft/defaults.ts';
 import type { EndsTogether, Warping } from '#core/craft/piece.ts';
 
 export interface NailLayout {
@@ -63,9 +63,27 @@ export function nailsOnRail(railMm: number, pitchMm: number): number {
 
 /**
  * Zigzag ends meet in pairs at the nails. At a share `u` of the height from one rail the
- * gaps alternate between these two; they are even at half height only, hence the spacing
- * rows at both ends.
+ * gaps alternate between these two, whether the rails stand nail over nail or half a pitch
+ * aside; they are even at half height only, hence the spacing rows at both ends.
  */
 export function zigzagGaps(u: number, pitchMm: number): { readonly first: number; readonly second: number } {
   return { first: u * pitchMm, second: (1 - u) * pitchMm };
+}
+
+/**
+ * How much a gap between ends differs from their mean at a share `u` of the height, as a
+ * share of that mean: 1 at a rail, 0 at half height. Ends of the two-nail step lie parallel.
+ */
+export function unevenness(u: number, warping: Warping): number {
+  return warping === 'two-nail' ? 0 : Math.abs(2 * u - 1);
+}
+
+/** Share of the height, round its middle, in which bare ends are even within `tolerance`, 0 to 1. */
+export function evenShare(tolerance: number, warping: Warping): number {
+  return warping === 'two-nail' ? 1 : tolerance;
+}
+
+/** Rows of twining or scrap yarn at each edge that set the ends even before weaving begins; none where they stand even. */
+export function spacingRows(warping: Warping): { readonly fewest: number; readonly most: number } {
+  return warping === 'two-nail' ? { fewest: 0, most: 0 } : SPACING_ROWS;
 }

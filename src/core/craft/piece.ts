@@ -37,7 +37,7 @@ interface GristWays {
   readonly class: YarnClassNumber;
 }
 
-type OnlyOne<T> = { [K in keyof T]: { readonly [G in K]: T[G] } & { readonly [O in Exclude<keyof T, K>]?: never } }[keyof T];
+type OnlyOne<T> = { [K in keyof T]: Pick<T, K> & Readonly<Partial<Record<Exclude<keyof T, K>, never>>> }[keyof T];
 
 /** How thick the yarn is, said in exactly one way. */
 export type YarnGrist = OnlyOne<GristWays>;
@@ -62,9 +62,18 @@ export type Yarn = YarnTraits & YarnGrist;
 
 export type Warping = 'zigzag' | 'two-nail';
 
+/** Each kind with what it is in `looms/`; a further kind is a further name here. */
+export type LoomKindName = 'nailed-frame' | 'notched-frame' | 'two-row-frame';
+
+export type NailRows = 'both' | 'inner';
+
 export interface Loom {
-  /** From one nail to the next along a rail, centre to centre. */
+  /** `nailed-frame` when missing. */
+  readonly kind?: LoomKindName;
+  /** From one nail or notch to the next along a row, centre to centre. */
   readonly nailPitchMm: number;
+  /** Which rows of a `two-row-frame` the warp goes round; `both` when missing. */
+  readonly nailRows?: NailRows;
   readonly warping: Warping;
   /** 1 uses every nail, 2 every second one … */
   readonly everyNthNail?: number;

@@ -28,6 +28,10 @@ export interface LoomPlan {
   readonly heightNeededMm: number;
   readonly topMm: number;
   readonly bottomMm: number;
+  /** Between bare ends where the first row comes to lie: they take turns, and differ on a zigzag. */
+  readonly firstGapsMm: { readonly narrow: number; readonly wide: number };
+  /** Rows of twining or scrap at each edge that set them even. */
+  readonly spacingRows: { readonly fewest: number; readonly most: number };
 }
 
 /** Of the yarn most picks are woven with. */

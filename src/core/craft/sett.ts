@@ -16,7 +16,7 @@ export const WEAVES = {
 
 /**
  * The most ends an inch takes: each intersection needs the room of one more thread
- * (Ashenhurst). Needs 1 ≤ intersections ≤ ends. Three quarters of it is a working sett.
+ * (Ashenhurst). Needs 1 ≤ intersections ≤ ends. `WORKING_SHARE` of it is a working sett.
  */
 export function ashenhurstMaximum(ashenhurstNumber: number, weave: { readonly ends: number; readonly intersections: number }): number {
   return (ashenhurstNumber * weave.ends) / (weave.ends + weave.intersections);
@@ -52,10 +52,18 @@ export function strandsFor(spacingMm: number, warpDiameterMm: number, strandDiam
   return Math.max(1, roundHalfUp((room / strandDiameterMm) ** 2));
 }
 
+/** F: the share of the most ends that weaves well. */
+export const WORKING_SHARE = 0.75;
+
 /** Loft tightness up to which a weft still beats down well; the canon of tapestry is 1, hangings lie near a half. */
 const THICK_FROM = 0.65;
 
 export type SpacingAdvice = 'too-thick' | 'suits' | 'too-thin';
+
+/** The narrowest room between ends in which a yarn of this loft beats down well. */
+export function spacingThatSuits(warpDiameterMm: number, weftLoftMm: number): number {
+  return (warpDiameterMm + weftLoftMm) / THICK_FROM;
+}
 
 /**
  * A weaver's advice by the yarn as it lies free: ends a quarter of an inch apart suit

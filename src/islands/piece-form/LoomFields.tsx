@@ -1,4 +1,4 @@
-import { ALLOWANCES, BEAT_BY, ENDS_TOGETHER, HANGING, HANGS, LOOM, MODE, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
+import { ALLOWANCES, BEAT_BY, ENDS_TOGETHER, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { LookButton } from './ActButton.tsx';
 import { AskedField, AskedFields } from './AskedField.tsx';
@@ -9,12 +9,17 @@ import { YarnRow } from './YarnRow.tsx';
 /** The finished size and the loom it is woven on. */
 export function SizeAndLoom() {
   const { typed: { texts } } = useHands();
+  const twoRows = hasTwoRows(texts);
   return (
     <section aria-labelledby="size-title">
       <h2 className="h3" id="size-title">Size and loom</h2>
       <div className="edit">
         <AskedFields asked={SIZE} texts={texts} className="half" />
         <p className="whole small quiet">Of the finished cloth, without fringe.</p>
+        <AskedField asked={LOOM_KIND} texts={texts} className="whole" />
+        {twoRows && <AskedField asked={NAIL_ROWS} texts={texts} className="whole" />}
+        <LookButton to="size-title">Show what this loom asks</LookButton>
+        <HiddenTexts texts={{ [NAIL_ROWS.key]: textOf(texts, NAIL_ROWS.key) }} prefix="" shown={new Set(twoRows ? [NAIL_ROWS.key] : [])} />
         <AskedFields asked={LOOM.slice(0, 2)} texts={texts} className="half" />
         <AskedFields asked={LOOM.slice(2)} texts={texts} className="third" />
         <AskedField asked={WARPING} texts={texts} className="whole" />

@@ -1,7 +1,8 @@
 import type { Dispatch } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
-import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, NAIL_PITCH, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
-import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
+import { chosenLoom, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { loomKind } from '#core/craft/looms/looms.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { fieldText, fieldUnit } from '#core/craft/piece-form/field-text.ts';
@@ -9,7 +10,7 @@ import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { widestOnLoom } from '#core/craft/my-piece/widest-on-loom.ts';
 import { Choose } from '#islands/ui/Choose.tsx';
-import { UnitField } from '#islands/ui/Field.tsx';
+import { Select, UnitField } from '#islands/ui/Field.tsx';
 import type { MineEvent } from './mine-after.ts';
 
 interface LoomFieldsProps {
@@ -17,13 +18,15 @@ interface LoomFieldsProps {
   pattern: Piece;
   faults: Readonly<Record<string, string>>;
   judged: MineJudgement;
+  /** With script, only what her loom asks is shown. */
+  alive: boolean;
   change: Dispatch<MineEvent>;
 }
 
 const UNITS = [{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }] as const;
 
 /** Loom, width and ends. What stays empty is as in the pattern, which stands in the hint. */
-export function LoomFields({ typed, pattern, faults, judged, change }: LoomFieldsProps) {
+export function LoomFields({ typed, pattern, faults, judged, change, alive }: LoomFieldsProps) {
   const { units } = typed;
   const { insideWidthMm, insideHeightMm, nailPitchMm } = pattern.loom;
   const ofPattern: Readonly<Record<string, number | undefined>> = { insideWidthMm, insideHeightMm, nailPitchMm, widthMm: pattern.size.widthMm };
@@ -44,12 +47,20 @@ export function LoomFields({ typed, pattern, faults, judged, change }: LoomField
     );
   };
   const choice = (asked: typeof WARPING) => asked.kind === 'choice' ? asked.options.map(({ text, label }) => ({ value: text, label })) : [];
+  const { kind: name } = chosenLoom(typed);
+  const kind = loomKind(name === undefined ? pattern.loom : { kind: name });
+  const ways = choice(WARPING).filter(({ value }) => kind.warpings.some((way) => way === value));
+  const chooser = (asked: typeof WARPING, options: readonly { readonly value: string; readonly label: string }[], hint?: string) => (
+    <Choose name={asked.key} legend={asked.label} hint={hint} value={textOf(typed.texts, asked.key)} options={options} error={faults[asked.key]} onChoose={(text) => change({ kind: 'type', key: asked.key, text })} />
+  );
   const widest = judged.ok || faults[INSIDE_WIDTH.key] === undefined ? null : widestOnLoom(typed, pattern);
   return (
     <fieldset className="stack">
       <legend className="h3">Your loom</legend>
       <Choose name="units" legend="Units" value={units} options={UNITS} onChoose={(other) => change({ kind: 'units', units: other })} />
       <input type="hidden" name="shown" value={units} />
+      <Select name={LOOM_KIND.key} label={LOOM_KIND.label} hint={kind.dressing} value={textOf(typed.texts, LOOM_KIND.key)} options={choice(LOOM_KIND)} error={faults[LOOM_KIND.key]} onChange={(event) => change({ kind: 'type', key: LOOM_KIND.key, text: event.currentTarget.value })} />
+      {(kind.rows === 2 || !alive) && chooser(NAIL_ROWS, choice(NAIL_ROWS), 'On a loom with two rows of nails.')}
       <div className="two folds">
         {lengthField(INSIDE_WIDTH)}
         {lengthField(INSIDE_HEIGHT)}
@@ -62,8 +73,8 @@ export function LoomFields({ typed, pattern, faults, judged, change }: LoomField
           <button type="button" className="as-link" onClick={() => change({ kind: 'type', key: WIDTH.key, text: fieldText(widest, WIDTH, units) })}>Make it so</button>
         </p>
       )}
-      <Choose name={ENDS.key} legend={ENDS.label} hint="Doubled: two ends are worked as one, on a loom whose nails stand close." value={textOf(typed.texts, ENDS.key)} options={choice(ENDS)} error={faults[ENDS.key]} onChoose={(text) => change({ kind: 'type', key: ENDS.key, text })} />
-      <Choose name={WARPING.key} legend={WARPING.label} value={textOf(typed.texts, WARPING.key)} options={choice(WARPING)} error={faults[WARPING.key]} onChoose={(text) => change({ kind: 'type', key: WARPING.key, text })} />
+      {chooser(ENDS, choice(ENDS), 'Doubled: two ends are worked as one, on a loom whose nails stand close.')}
+      {(ways.length > 1 || !alive) && chooser(WARPING, alive ? ways : choice(WARPING))}
     </fieldset>
   );
 }

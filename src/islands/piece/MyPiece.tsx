@@ -42,7 +42,7 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, revision,
       <form method="post" action={action} className="stack stack-wide" aria-label="My piece" noValidate>
         <input type="hidden" name="series" value={slug} />
         <input type="hidden" name="revision" value={revision} />
-        <LoomFields {...{ typed, pattern, faults, change, judged }} />
+        <LoomFields {...{ typed, pattern, faults, change, judged, alive }} />
         <YarnFields {...{ typed, pattern, faults, change, alive }} fitted={judged.ok ? judged.fitted : null} />
         <div className="row">
           <Button type="submit" kind="act">Keep my piece</Button>

@@ -1,4 +1,5 @@
 /** Amounts every piece has: ends, sizes, warp, cards, hanging, hours. */
+import { holderStep } from '#core/craft/looms/looms.ts';
 import { HANGING } from '#core/craft/defaults.ts';
 import {
   countOf,
@@ -44,7 +45,7 @@ const ends: FixedAmount = ({ piece, plan }) => ({
     formula: 'width on the loom ÷ room for one end, rounded, raised to the number the pattern needs',
     inputs: [
       { name: 'width on the loom', value: lengthOf(plan.ends.loomWidthMm, 'size') },
-      { name: 'from nail to nail', value: lengthOf(piece.loom.nailPitchMm, 'fine') },
+      { name: 'from nail to nail', value: lengthOf(holderStep(piece.loom), 'fine') },
       { name: 'before rounding', value: { kind: 'number', value: plan.ends.raw } },
     ],
     source: GEOMETRY,
@@ -72,7 +73,7 @@ const spacing: FixedAmount = ({ piece, plan }) => ({
   how: {
     formula: 'nail spacing ÷ ends at a nail × ends worked together',
     inputs: [
-      { name: 'from nail to nail', value: lengthOf(piece.loom.nailPitchMm, 'fine') },
+      { name: 'from nail to nail', value: lengthOf(holderStep(piece.loom), 'fine') },
       { name: 'every so-many-th nail', value: { kind: 'number', value: piece.loom.everyNthNail ?? 1 } },
       { name: 'ends worked together', value: { kind: 'number', value: piece.warp.endsTogether ?? 1 } },
     ],
@@ -106,7 +107,7 @@ const loomWidth: FixedAmount = ({ piece, plan }) => ({
     formula: '(nails − 1) × nail spacing + room beyond the outer nails',
     inputs: [
       { name: 'nails', value: countOf(plan.ends.nailsTop, 'nail', 'nails') },
-      { name: 'from nail to nail', value: lengthOf(piece.loom.nailPitchMm, 'fine') },
+      { name: 'from nail to nail', value: lengthOf(holderStep(piece.loom), 'fine') },
     ],
     source: COMMON,
     trust: 'formula',

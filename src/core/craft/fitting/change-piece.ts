@@ -1,5 +1,7 @@
 /** The pattern with a student's own loom, width and yarns put in. Nothing is reckoned yet. */
 import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
+import { layoutOf } from '#core/craft/frame-loom/room.ts';
+import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import type { Band, Loom, Piece, Shape, Warp, Yarn } from '#core/craft/piece.ts';
 
 const isAboveZero = (x: number | undefined): x is number => x !== undefined && Number.isFinite(x) && x > 0;
@@ -12,10 +14,20 @@ export function nthNailFor(patternPitchMm: number, ownPitchMm: number): number {
   return isAboveZero(ownPitchMm) ? Math.min(50, Math.max(1, Math.round(patternPitchMm / ownPitchMm))) : 1;
 }
 
-function changeLoom(pattern: Loom, mine: MyPiece['loom']): Loom {
+/** Her own kind of loom may take the pattern's way of winding or not, and has its own rows of nails. */
+function changeKind(pattern: Loom, mine: NonNullable<MyPiece['loom']>): Loom {
   const own = { ...pattern, ...mine };
-  if (mine?.nailPitchMm === undefined) return own;
-  const nth = nthNailFor(pattern.nailPitchMm * (pattern.everyNthNail ?? 1), mine.nailPitchMm);
+  const { warpings, rows } = loomKind(own);
+  const warping = mine.warping ?? (warpings.includes(own.warping) ? own.warping : warpings[0]);
+  const { nailRows, ...loom } = own;
+  return { ...loom, warping, ...(nailRows === undefined || rows === 1 ? {} : { nailRows }) };
+}
+
+function changeLoom(pattern: Loom, mine: MyPiece['loom']): Loom {
+  if (mine === undefined) return pattern;
+  const own = changeKind(pattern, mine);
+  if (mine.nailPitchMm === undefined && mine.kind === undefined && mine.nailRows === undefined) return own;
+  const nth = nthNailFor(layoutOf(pattern).pitchMm, holderStep(own));
   const { everyNthNail: _, ...allNails } = own;
   return nth === 1 ? allNails : { ...allNails, everyNthNail: nth };
 }
@@ -23,7 +35,8 @@ function changeLoom(pattern: Loom, mine: MyPiece['loom']): Loom {
 /** The pattern pins its ends for its own loom; on another one they are reckoned anew. */
 function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
   const own = { ...warp, ...(mine.endsTogether === undefined ? {} : { endsTogether: mine.endsTogether }) };
-  const asPinned = mine.widthMm === undefined && mine.endsTogether === undefined && mine.loom?.nailPitchMm === undefined && mine.loom?.warping === undefined;
+  const { kind, nailRows, nailPitchMm, warping } = mine.loom ?? {};
+  const asPinned = [mine.widthMm, mine.endsTogether, kind, nailRows, nailPitchMm, warping].every((own) => own === undefined);
   return endCount !== undefined && asPinned ? { ...own, endCount } : own;
 }
 

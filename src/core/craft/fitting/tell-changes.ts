@@ -3,6 +3,7 @@ import type { Piece } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
 import { lengthOf, type LengthUse } from '#core/craft/amounts/amount-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
+import { loomKind } from '#core/craft/looms/looms.ts';
 import type { Units } from '#core/units/units.ts';
 
 export interface Made {
@@ -15,9 +16,11 @@ const SAME_MM = 0.05;
 
 const ORDINALS = ['second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth', 'ninth', 'tenth'];
 
-function nailWords(piece: Piece): string {
-  const nth = piece.loom.everyNthNail ?? 1;
-  return nth === 1 ? 'every nail' : `every ${ORDINALS[nth - 2] ?? `${String(nth)}th`} nail`;
+function nailWords({ loom }: Piece): string {
+  const nth = loom.everyNthNail ?? 1;
+  const inner = loomKind(loom).rows === 2 && loom.nailRows === 'inner' ? 'inner ' : '';
+  const nail = `${inner}${loomKind(loom).holder.one}`;
+  return nth === 1 ? `every ${nail}` : `every ${ORDINALS[nth - 2] ?? `${String(nth)}th`} ${nail}`;
 }
 
 function picksOf(plan: Plan): number {
@@ -38,6 +41,8 @@ export function tellChanges(before: Made, after: Made, units: Units): readonly s
     if (Math.abs(is - was) > SAME_MM) told.push(words(length(is, use), length(was, use)));
   };
   tellLength(before.piece.size.widthMm, after.piece.size.widthMm, 'size', (is, was) => `The piece is ${is} wide instead of ${was}.`);
+  const [kindBefore, kind] = [loomKind(before.piece.loom), loomKind(after.piece.loom)];
+  if (kind !== kindBefore) told.push(kind.dressing);
   if (after.piece.loom.warping !== before.piece.loom.warping) {
     told.push(after.piece.loom.warping === 'zigzag' ? 'The warp goes round every nail in a zigzag.' : 'The warp steps along two nails at a time.');
   }

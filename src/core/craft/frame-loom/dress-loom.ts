@@ -2,9 +2,10 @@
 import { NAIL_DIAMETER_MM, ASHENHURST_K } from '#core/craft/defaults.ts';
 import { END_RANGE, endsFor, endsSuit, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
+import { loomKind } from '#core/craft/looms/looms.ts';
 import { bottomAllowance, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
 import { largestHeight, largestWidth, layoutOf, widthOfEnds } from '#core/craft/frame-loom/room.ts';
-import { endsPerMm, nailsUsed, railNeeded, workingSpacing } from '#core/craft/nails.ts';
+import { endsPerMm, nailsUsed, railNeeded, spacingRows, workingSpacing, zigzagGaps } from '#core/craft/nails.ts';
 import type { Dowel, EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
 import type { EndsPlan, LoomPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
@@ -111,8 +112,9 @@ export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings:
 /** Height of cloth and bare warp, against the frame. */
 export function fitHeight(size: Piece['size'], loom: Loom, settings: Settings, dowel: Dowel | undefined, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
   const heightOnLoomMm = heightBeforeShrinking(size.heightMm, settings.relaxation, settings.wetShrinkage);
-  const topMm = topAllowance(settings.topMm, dowel?.diameterMm);
-  const bottomMm = bottomAllowance(settings.bottomMm);
+  const least = loomKind(loom).leastBareMm;
+  const topMm = topAllowance(settings.topMm, dowel?.diameterMm, least.top);
+  const bottomMm = bottomAllowance(settings.bottomMm, least.bottom);
   const heightNeededMm = heightOnLoomMm + topMm + bottomMm;
   if (loom.insideHeightMm < heightNeededMm - HAIR_MM) {
     const largestMm = largestHeight(loom, dowel, settings);
@@ -120,5 +122,13 @@ export function fitHeight(size: Piece['size'], loom: Loom, settings: Settings, d
     const inside = `The loom is ${findings.length(loom.insideHeightMm)} high inside.`;
     findings.reject('E_FIT', '/loom/insideHeightMm', `${inside} The piece needs ${findings.length(heightNeededMm, 'up')}. ${largest}`);
   }
-  return { heightOnLoomMm, heightNeededMm, topMm, bottomMm };
+  return { heightOnLoomMm, heightNeededMm, topMm, bottomMm, firstGapsMm: gapsAt(bottomMm, loom), spacingRows: spacingRows(loom.warping) };
+}
+
+/** Gaps between single bare ends so far from a rail, at most at half height. */
+function gapsAt(fromRailMm: number, loom: Loom): LoomPlan['firstGapsMm'] {
+  const { pitchMm, warping } = layoutOf(loom);
+  if (warping === 'two-nail') return { narrow: pitchMm, wide: pitchMm };
+  const { first, second } = zigzagGaps(Math.min(0.5, fromRailMm / loom.insideHeightMm), pitchMm);
+  return { narrow: first, wide: second };
 }

@@ -5,7 +5,7 @@ import type { Beat, WeaveMode, Yarn } from '#core/craft/piece.ts';
 import { BEAT_RANGE, beatOfSwatch, pickGeometry, pickSpacing, type PickGeometry } from '#core/craft/picks.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { below } from '#core/craft/reading/findings.ts';
-import { tightness } from '#core/craft/sett.ts';
+import { adviseSpacing, spacingThatSuits, strandsFor, tightness } from '#core/craft/sett.ts';
 import { threadOf, type Thread } from '#core/craft/yarn/thread.ts';
 
 export function threadsOf(yarns: ReadonlyMap<string, Yarn | undefined>): ReadonlyMap<string, Thread> {
@@ -28,13 +28,24 @@ function reportJam(role: string, warp: DressedWarp, thread: Thread, findings: Fi
   findings.reject('E_JAM', below('/yarns', role), `${yarn} ${waysOut(warp, thread, findings)}`);
 }
 
+/** How many strands of it would come out well; a warp that loosens by itself leaves that open. */
+function strandsWords(warp: DressedWarp, thread: Thread): string {
+  const strandMm = thread.compressedMm / Math.sqrt(thread.strands);
+  const strands = strandsFor(warp.ends.spacingMm, warp.workingDiameterMm, strandMm);
+  return strands === undefined || strands <= thread.strands ? 'Take more strands together' : `Take ${String(strands)} strands together`;
+}
+
 function reportWeftFaced(role: string, warp: DressedWarp, thread: Thread, findings: Findings): void {
   const path = below('/yarns', role);
-  if (tightness(warp.workingDiameterMm, thread.loftMm, warp.ends.spacingMm) > 1) {
+  const { spacingMm } = warp.ends;
+  if (tightness(warp.workingDiameterMm, thread.loftMm, spacingMm) > 1) {
     findings.warn('W_WARP_SHOWS', path, 'This yarn is as thick as the room between the ends: it will not beat down, and the warp will show.');
+  } else if (adviseSpacing(spacingMm, warp.workingDiameterMm, thread.loftMm) === 'too-thick') {
+    const suits = findings.length(spacingThatSuits(warp.workingDiameterMm, thread.loftMm), 'up');
+    findings.warn('W_THICK', path, `This yarn is thick for ends so close, and hard to beat down. It suits ends ${suits} apart and more.`);
   }
-  if (tightness(warp.workingDiameterMm, thread.compressedMm, warp.ends.spacingMm) < TIGHTNESS.loose) {
-    findings.warn('W_LOOSE', path, 'This yarn is thin for the room between the ends, and the rows may slip. Take more strands together, or set the ends closer.');
+  if (tightness(warp.workingDiameterMm, thread.compressedMm, spacingMm) < TIGHTNESS.loose) {
+    findings.warn('W_LOOSE', path, `This yarn is thin for the room between the ends, and the rows may slip. ${strandsWords(warp, thread)}, or set the ends closer.`);
   }
 }
 

@@ -2,7 +2,9 @@
  * Reading a frame-loom piece. Every part is read for itself, so that all that is wrong
  * is told at once, and what is sound can still be checked against its neighbours.
  */
-import type { Allowances, Band, Beat, Dowel, Loom, Piece, Warp, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Beat, Dowel, Loom, Piece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { LoomKind } from '#core/craft/looms/loom-kind.ts';
+import { LOOM_KIND_NAMES, LOOM_KINDS, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import { BEAT_RANGE } from '#core/craft/picks.ts';
 import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
 import { below, type Findings } from '#core/craft/reading/findings.ts';
@@ -52,13 +54,25 @@ function readSize(fields: Fields): Piece['size'] {
   return size;
 }
 
+/** A way of winding that this kind of loom takes. */
+function readWarping(fields: Fields, { warpings, otherWarping }: LoomKind): Warping {
+  const warping = fields.choice('warping', 'Warping', ['zigzag', 'two-nail']);
+  if (!warpings.includes(warping) && otherWarping !== undefined) {
+    fields.reject('E_ENUM', 'warping', `${otherWarping} This works: ${warpings.join(', ')}.`);
+  }
+  return warping;
+}
+
 function readLoom(fields: Fields): Loom {
   const group = fields.group('loom', 'Loom');
+  const kind = group.optionalChoice('kind', 'Kind of loom', LOOM_KIND_NAMES);
   const loom = {
     nailPitchMm: group.number('nailPitchMm', NAIL_PITCH),
-    warping: group.choice('warping', 'Warping', ['zigzag', 'two-nail']),
+    warping: readWarping(group, loomKind(present({ kind }))),
     insideHeightMm: group.number('insideHeightMm', length('Inside height of the loom')),
     ...present({
+      kind,
+      nailRows: kind !== undefined && LOOM_KINDS[kind].rows === 2 ? group.optionalChoice('nailRows', 'Rows of nails', NAIL_ROW_NAMES) : undefined,
       everyNthNail: group.optionalNumber('everyNthNail', NTH_NAIL),
       nailDiameterMm: group.optionalNumber('nailDiameterMm', length('Thickness of a nail', 50)),
       insideWidthMm: group.optionalNumber('insideWidthMm', length('Inside width of the loom')),

@@ -1,12 +1,13 @@
 /** The largest piece a loom holds. */
 import { END_RANGE, endsSuit } from '#core/craft/ends.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
+import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import { bottomAllowance, heightAfterShrinking, topAllowance } from '#core/craft/loom-height.ts';
 import { endsOnNails, endsPerMm, nailsOnRail, usedPitch, type NailLayout } from '#core/craft/nails.ts';
 import type { Dowel, Loom, Warp } from '#core/craft/piece.ts';
 
-export function layoutOf(loom: Loom): NailLayout {
-  return { pitchMm: usedPitch(loom.nailPitchMm, loom.everyNthNail ?? 1), warping: loom.warping };
+export function layoutOf(loom: Pick<Loom, 'kind' | 'nailPitchMm' | 'nailRows' | 'everyNthNail' | 'warping'>): NailLayout {
+  return { pitchMm: usedPitch(holderStep(loom), loom.everyNthNail ?? 1), warping: loom.warping };
 }
 
 /** Finished width of so many ends. */
@@ -25,6 +26,6 @@ export function largestWidth(loom: Loom, warp: Pick<Warp, 'endsTogether' | 'pari
 
 /** Finished height that fits between the rails beside the bare warp; 0 if nothing fits. */
 export function largestHeight(loom: Loom, dowel: Dowel | undefined, settings: Settings): number {
-  const bareMm = topAllowance(settings.topMm, dowel?.diameterMm) + bottomAllowance(settings.bottomMm);
+  const bareMm = topAllowance(settings.topMm, dowel?.diameterMm, loomKind(loom).leastBareMm.top) + bottomAllowance(settings.bottomMm, loomKind(loom).leastBareMm.bottom);
   return Math.max(0, heightAfterShrinking(loom.insideHeightMm - bareMm, settings.relaxation, settings.wetShrinkage));
 }

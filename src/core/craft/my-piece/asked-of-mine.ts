@@ -1,5 +1,6 @@
 /** What a student is asked about her own making. What she leaves empty stays as in the pattern. */
 import { option, type Asked } from '#core/craft/piece-form/asked.ts';
+import { LOOM_KIND as KIND_OF_PIECE, NAIL_ROWS as ROWS_OF_PIECE } from '#core/craft/piece-form/asked-of-piece.ts';
 import { BY, COLOUR, LABEL, STRANDS, WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
 import type { Units } from '#core/units/units.ts';
 
@@ -31,6 +32,10 @@ export const WIDTH: AskedLength = {
 };
 export const LENGTHS: readonly AskedLength[] = [INSIDE_WIDTH, INSIDE_HEIGHT, NAIL_PITCH, WIDTH];
 
+/** The same kinds as a teacher's form has. */
+export const LOOM_KIND: Asked = { ...KIND_OF_PIECE, key: 'kind', label: 'Your loom has' };
+export const NAIL_ROWS: Asked = { ...ROWS_OF_PIECE, key: 'nailRows' };
+
 export const WARPING: Asked = {
   key: 'warping', kind: 'choice', label: 'How you wind',
   options: [option('zigzag', 'Zigzag round every nail'), option('two-nail', 'Along two nails at a time')],
@@ -39,6 +44,8 @@ export const ENDS: Asked = {
   key: 'endsTogether', kind: 'choice', label: 'Ends',
   options: [{ text: '1', value: 1, label: 'Single' }, { text: '2', value: 2, label: 'Doubled' }],
 };
+
+export const CHOICES: readonly Asked[] = [LOOM_KIND, NAIL_ROWS, WARPING, ENDS];
 
 /** Her yarn is said in the ways a label says it, or by wraps where there is none. */
 export const AS_PATTERN = 'pattern';

@@ -1,7 +1,8 @@
 /** What a student's form comes to: her own piece with its plan, or a sentence at every field that stands in the way. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
-import type { EndsTogether, Piece, Warping } from '#core/craft/piece.ts';
+import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
+import type { EndsTogether, LoomKindName, NailRows, Piece, Warping } from '#core/craft/piece.ts';
 import { readText } from '#core/craft/piece-form/field-text.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
@@ -9,7 +10,7 @@ import { present } from '#core/craft/reading/present.ts';
 import type { Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, NAIL_PITCH, WARPING, WIDTH, type AskedLength } from './asked-of-mine.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from './asked-of-mine.ts';
 import { isOwnYarn, yarnOf, type TypedMine } from './typed-mine.ts';
 
 export interface MineFound {
@@ -57,12 +58,14 @@ const limitText = (mm: number, { kind }: AskedLength, units: Units): string => a
 /** What differs from the pattern; a choice that is the pattern's own is none. */
 function readMine(typed: TypedMine, pattern: Piece, faults: Map<string, string>): MyPiece {
   const length = (asked: AskedLength): number | undefined => readLength(typed, asked, faults);
-  const warping = warpingOf(textOf(typed.texts, WARPING.key));
+  const { kind, nailRows, warping } = chosenLoom(typed);
   const together = endsOf(textOf(typed.texts, ENDS.key));
   const loom = present({
     insideWidthMm: length(INSIDE_WIDTH),
     insideHeightMm: length(INSIDE_HEIGHT),
     nailPitchMm: length(NAIL_PITCH),
+    kind: kind === (pattern.loom.kind ?? DEFAULT_KIND) ? undefined : kind,
+    nailRows: nailRows === (pattern.loom.nailRows ?? 'both') ? undefined : nailRows,
     warping: warping === pattern.loom.warping ? undefined : warping,
   });
   const yarns = readYarns(typed, pattern, faults);
@@ -74,7 +77,17 @@ function readMine(typed: TypedMine, pattern: Piece, faults: Map<string, string>)
   });
 }
 
-const warpingOf = (text: string): Warping | undefined => (text === 'zigzag' || text === 'two-nail' ? text : undefined);
+/** What she chose in words; a way of winding that her kind of loom does not take, or rows it does not have, go unheard. */
+export function chosenLoom({ texts }: TypedMine): { readonly kind?: LoomKindName; readonly nailRows?: NailRows; readonly warping?: Warping } {
+  const kind = LOOM_KIND_NAMES.find((name) => name === textOf(texts, LOOM_KIND.key));
+  const { rows, warpings } = loomKind(present({ kind }));
+  return present({
+    kind,
+    nailRows: rows === 2 ? NAIL_ROW_NAMES.find((name) => name === textOf(texts, NAIL_ROWS.key)) : undefined,
+    warping: warpings.find((way) => way === textOf(texts, WARPING.key)),
+  });
+}
+
 const endsOf = (text: string): EndsTogether | undefined => (text === '2' ? 2 : text === '1' ? 1 : undefined);
 
 /** Her own yarns, read as those of any piece are. */
@@ -97,6 +110,8 @@ const FIELD_OF: Readonly<Record<string, string>> = {
   '/loom/insideHeightMm': INSIDE_HEIGHT.key,
   '/loom/nailPitchMm': NAIL_PITCH.key,
   '/loom/warping': WARPING.key,
+  '/loom/kind': LOOM_KIND.key,
+  '/loom/nailRows': NAIL_ROWS.key,
   '/size/widthMm': WIDTH.key,
 };
 

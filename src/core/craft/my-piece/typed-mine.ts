@@ -5,12 +5,13 @@
 import type { MyPiece } from '#core/craft/fit.ts';
 import type { Piece, Yarn } from '#core/craft/piece.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
+import { DEFAULT_KIND } from '#core/craft/looms/looms.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { gristTexts } from '#core/craft/piece-form/type-piece.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
-import { AS_PATTERN, ENDS, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, WARPING, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+import { AS_PATTERN, CHOICES, ENDS, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARPING, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
 
 export interface TypedMine {
   /** Those of lengths that name no unit themselves. */
@@ -37,7 +38,9 @@ export function typeMine(mine: MyPiece, pattern: Piece, units: Units): TypedMine
     units,
     texts: {
       ...Object.fromEntries(LENGTHS.map((asked) => [asked.key, fieldText(kept[asked.key], asked, units)])),
-      // What is chosen is always one of two; where she chose nothing it is the pattern's.
+      // What is chosen is always one of the options; where she chose nothing it is the pattern's.
+      kind: fieldText(mine.loom?.kind ?? pattern.loom.kind ?? DEFAULT_KIND, LOOM_KIND, units),
+      nailRows: fieldText(mine.loom?.nailRows ?? pattern.loom.nailRows ?? 'both', NAIL_ROWS, units),
       warping: fieldText(mine.loom?.warping ?? pattern.loom.warping, WARPING, units),
       endsTogether: fieldText(mine.endsTogether ?? pattern.warp.endsTogether ?? 1, ENDS, units),
     },
@@ -52,7 +55,7 @@ export function mineOfFields(ask: (name: string) => string | undefined, pattern:
   const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
-    texts: Object.fromEntries([...LENGTHS, WARPING, ENDS].map(({ key }) => [key, text(key)])),
+    texts: Object.fromEntries([...LENGTHS, ...CHOICES].map(({ key }) => [key, text(key)])),
     yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, Object.fromEntries(YARN_KEYS.map((key) => [key, text(`yarns.${role}.${key}`)]))])),
   };
   // Without script she chooses other units and sends the form in one go; what she typed belongs to what she saw.

@@ -6,7 +6,7 @@ import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
 import { INSIDE_WIDTH, NAIL_PITCH, WIDTH } from './asked-of-mine.ts';
-import { judgeMine } from './judge-mine.ts';
+import { chosenLoom, judgeMine } from './judge-mine.ts';
 import type { TypedMine } from './typed-mine.ts';
 
 /** Narrower than this nobody would call it the same piece. */
@@ -18,7 +18,7 @@ export function widestOnLoom(typed: TypedMine, pattern: Piece): number | null {
   const inside = lengthOfField(typed, INSIDE_WIDTH);
   if (inside === undefined) return null;
   const pitch = lengthOfField(typed, NAIL_PITCH);
-  const onLoom = changePiece(pattern, { loom: { insideWidthMm: inside, ...(pitch === undefined ? {} : { nailPitchMm: pitch }) }, endsTogether: textOf(typed.texts, 'endsTogether') === '2' ? 2 : 1 });
+  const onLoom = changePiece(pattern, { loom: { ...chosenLoom(typed), insideWidthMm: inside, ...(pitch === undefined ? {} : { nailPitchMm: pitch }) }, endsTogether: textOf(typed.texts, 'endsTogether') === '2' ? 2 : 1 });
   const room = roomOnLoom(onLoom).widthMm;
   if (room === undefined) return null;
   const step = typed.units === 'in' ? MM_PER_INCH / 4 : 5;

@@ -1,7 +1,9 @@
 /** What is asked once for the whole piece, group by group as the form shows it. */
 import { DEFAULT_ALLOWANCES, NAIL_DIAMETER_MM, TIE_MM } from '#core/craft/defaults.ts';
-import { option, type Asked } from './asked.ts';
-import { textOf, type TypedPiece } from './typed-piece.ts';
+import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
+import type { LoomKindName } from '#core/craft/piece.ts';
+import { option, type Asked, type Option } from './asked.ts';
+import { textOf, type Texts, type TypedPiece } from './typed-piece.ts';
 
 export const SIZE: readonly Asked[] = [
   { key: 'size.widthMm', kind: 'length', label: 'Width', needed: true },
@@ -15,6 +17,18 @@ export const LOOM: readonly Asked[] = [
   { key: 'loom.everyNthNail', kind: 'number', label: 'Use every … nail', otherwise: 'every one' },
   { key: 'loom.nailDiameterMm', kind: 'fine', label: 'Nails', called: 'Thickness of a nail', standard: () => NAIL_DIAMETER_MM },
 ];
+
+const [firstKind, ...otherKinds] = LOOM_KIND_NAMES;
+const kindOption = (name: LoomKindName): Option => option(name, LOOM_KINDS[name].label);
+export const LOOM_KIND: Asked = { key: 'loom.kind', kind: 'choice', label: 'The loom has', options: [kindOption(firstKind), ...otherKinds.map(kindOption)] };
+
+export const NAIL_ROWS: Asked = {
+  key: 'loom.nailRows', kind: 'choice', label: 'The warp goes round',
+  options: [option('both', 'Inner and outer nails by turns'), option('inner', 'The inner nails only')],
+};
+
+/** Whether the loom of this form has rows of nails to choose from. */
+export const hasTwoRows = (texts: Texts): boolean => LOOM_KIND_NAMES.some((name) => name === textOf(texts, LOOM_KIND.key) && LOOM_KINDS[name].rows === 2);
 
 export const WARPING: Asked = {
   key: 'loom.warping', kind: 'choice', label: 'Warping', needed: true,
@@ -92,6 +106,6 @@ export const ALLOWANCES: readonly Asked[] = [
 
 /** All of them but the beat, which is two values of which one is given. */
 export const ASKED_ONCE: readonly Asked[] = [
-  ...SIZE, ...LOOM, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...HANGING, HANGS, SEED, ...ALLOWANCES,
+  ...SIZE, LOOM_KIND, ...LOOM, NAIL_ROWS, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...HANGING, HANGS, SEED, ...ALLOWANCES,
 ];
 export const BEAT_FIELDS: readonly Asked[] = [BEAT_BY, OWN_BEAT, SWATCH_BEAT];

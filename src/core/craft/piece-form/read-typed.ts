@@ -4,7 +4,7 @@ import { texFromWraps } from '#core/craft/yarn/diameter.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 import { BAND_NAME, bandFields, FILL_KEY, SHAPE, shapeFields, TECHNIQUE } from './asked-of-band.ts';
-import { ASKED_ONCE, BEAT_BY, FIRMNESS, HANGING, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
+import { ASKED_ONCE, BEAT_BY, FIRMNESS, HANGING, hasTwoRows, NAIL_ROWS, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
 import { ASHENHURST, BALL, BY, gristAsked, ROLE, WRAPS, YARN_TRAITS } from './asked-of-yarn.ts';
 import { missingSays, readText, type ReadText } from './field-text.ts';
 import { textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } from './typed-piece.ts';
@@ -160,7 +160,8 @@ function readBeat(reading: Reading, texts: Texts): Group {
 export function readTyped({ units, texts, warpYarn, yarns: rows, bands }: TypedPiece): ReadTyped {
   const reading = new Reading(units);
   const piece: Group = { craft: 'frame-loom', size: {}, loom: {}, warp: {} };
-  reading.fill(piece, texts, [...ASKED_ONCE, ...together(texts, HANGING, 'dowel.diameterMm')], '');
+  const askedOnce = ASKED_ONCE.filter((asked) => asked !== NAIL_ROWS || hasTwoRows(texts));
+  reading.fill(piece, texts, [...askedOnce, ...together(texts, HANGING, 'dowel.diameterMm')], '');
   putAt(piece, 'warp.yarn', readYarn(reading, warpYarn, 'warp.yarn.', ASHENHURST_K.warp));
   piece['beat'] = readBeat(reading, texts);
   const { yarns, roleOf } = readYarns(reading, rows);

@@ -29,6 +29,7 @@ export type WarningCode =
   | 'W_WIDTH'
   | 'W_CLAMPED'
   | 'W_WARP_SHOWS'
+  | 'W_THICK'
   | 'W_LOOSE'
   | 'W_THIN'
   | 'W_PLAIN_END'

@@ -23,8 +23,16 @@ describe('a yarn', () => {
     expect(warningsOf(withGround({ metresPer100g: 180, wrapsPerInch: 10 }))).not.toContain('W_WARP_SHOWS /yarns/ground');
   });
 
-  test('that is thin for its ends may slip', () => {
+  test('that is thick for its ends says how far apart they would suit it', () => {
+    expect(warningWords(withGround({ metresPer100g: 100, wrapsPerInch: 7.5 }), 'W_THICK')).toEqual([
+      'This yarn is thick for ends so close, and hard to beat down. It suits ends 6.5 mm apart and more.',
+    ]);
+    expect(warningsOf(withGround({ metresPer100g: 100, wrapsPerInch: 5 }))).not.toContain('W_THICK /yarns/ground');
+  });
+
+  test('that is thin for its ends may slip, and says how many strands together would hold', () => {
     expect(warningsOf(withGround({ metresPer100g: 1200 }))).toContain('W_LOOSE /yarns/ground');
+    expect(warningWords(withGround({ metresPer100g: 1200 }), 'W_LOOSE')[0]).toContain('Take 9 strands together, or set the ends closer.');
   });
 
   test('in balanced cloth is not asked to cover the warp', () => {

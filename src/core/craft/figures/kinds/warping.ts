@@ -1,5 +1,6 @@
 /** Winding the warp: one thread round the nails of both rails, by zigzag or along two neighbouring nails. */
 import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { layoutOf } from '#core/craft/frame-loom/room.ts';
 import { handWay, measureBeside, nail, wood, words } from '#core/craft/figures/kit/marks.ts';
 import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
 import { layStrand, toPath, tube } from '#core/craft/figures/kit/strand.ts';
@@ -46,7 +47,7 @@ export const WARPING: Figure = {
 };
 
 function pitchMm(input: FigureInput): number {
-  return input.piece.loom.nailPitchMm * (input.piece.loom.everyNthNail ?? 1);
+  return layoutOf(input.piece.loom).pitchMm;
 }
 
 /** Two ends leave every nail but the first: down at its right, up at the left of the next. */

@@ -29,7 +29,7 @@ const band = (index: number, technique: Plan['bands'][number]['technique'], heig
 
 export const PLAN: Plan = {
   ends: { count: 62, working: 62, raw: 61.2, spacingMm: 5, nailsTop: 32, nailsBottom: 31, woundWidthMm: 305, loomWidthMm: 306 },
-  loom: { insideWidthNeededMm: 350, heightOnLoomMm: 408, heightNeededMm: 508, topMm: 40, bottomMm: 60 },
+  loom: { insideWidthNeededMm: 350, heightOnLoomMm: 408, heightNeededMm: 508, topMm: 40, firstGapsMm: { narrow: 1, wide: 9 }, spacingRows: { fewest: 3, most: 4 }, bottomMm: 60 },
   weft: { diameterSumMm: 1.8, pickSpacingMm: 1.45, tightness: 0.36, crimp: 0.066, stepMm: 5.33, turnMm: 3.2, pickMm: 328.5, rawPicks: 83 },
   warp: { netMm: 32770, withMarginMm: 36000, massG: 13 },
   yarns: { ground: { netMm: 73915, withMarginMm: 85000, massG: 41, loads: 10, rowsPerLoad: 24 } },

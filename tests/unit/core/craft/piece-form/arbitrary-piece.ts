@@ -71,12 +71,17 @@ const allowances: fc.Arbitrary<Allowances | undefined> = fc.record({
   tailMm: perhaps(mm), loadMm: perhaps(mm), marginWeft: perhaps(share), marginWarp: perhaps(share),
 }).map((all) => { const given = present(all); return Object.keys(given).length === 0 ? undefined : given; });
 
+const loomKind = fc.oneof(
+  fc.constant({}),
+  fc.constantFrom('nailed-frame', 'notched-frame').map((kind) => ({ kind })),
+  perhaps(fc.constantFrom('both', 'inner')).map((nailRows) => ({ kind: 'two-row-frame', ...present({ nailRows }) } as const)),
+);
 const once = fc.record({
   size: fc.record({ widthMm: mm, heightMm: mm }),
   loom: fc.record({
     nailPitchMm: mm, warping: fc.constantFrom('zigzag', 'two-nail'), insideHeightMm: mm,
     more: fc.record({ everyNthNail: perhaps(count), nailDiameterMm: perhaps(mm), insideWidthMm: perhaps(mm) }),
-  }).map(({ more, ...loom }) => ({ ...loom, ...present(more) })),
+  }).chain(({ more, ...loom }) => loomKind.map((kind) => ({ ...kind, ...loom, ...present(more) }))),
   warp: fc.record({
     yarn,
     more: fc.record({ endsTogether: perhaps(fc.constantFrom(1, 2)), parity: perhaps(fc.constantFrom('any', 'even', 'odd')), endCount: perhaps(count), tieMm: perhaps(mm) }),
