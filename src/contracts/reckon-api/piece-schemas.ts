@@ -115,8 +115,10 @@ const Shape = closed(
 );
 
 const Loom = closed(
-  'A frame with nails along two rails.',
+  'A frame with nails or notches along two rails.',
   {
+    kind: choice('`nailed-frame` when missing. Notches take one end each, so they are warped `two-nail`.', 'nailed-frame', 'notched-frame', 'two-row-frame'),
+    nailRows: choice('Which rows of a two-row frame the warp goes round; `both` when missing. For that kind only.', 'both', 'inner'),
     nailPitchMm: number('From nail to nail, centre to centre.', { min: 1, max: 100 }),
     warping: choice('Round every nail, or along two neighbouring ones.', 'zigzag', 'two-nail'),
     everyNthNail: whole('1 uses every nail, 2 every second one; 1 when missing.', { min: 1, max: 50 }),
@@ -124,7 +126,13 @@ const Loom = closed(
     insideHeightMm: lengthMm('From the nails of one rail to those of the other.'),
     insideWidthMm: lengthMm('Clear rail. Not looked at when missing.'),
   },
-  ['everyNthNail', 'nailDiameterMm', 'insideWidthMm'],
+  ['kind', 'nailRows', 'everyNthNail', 'nailDiameterMm', 'insideWidthMm'],
+  {
+    allOf: [
+      { if: { properties: { kind: { const: 'notched-frame' } }, required: ['kind'] }, then: { properties: { warping: { const: 'two-nail' } } } },
+      { if: { not: { properties: { kind: { const: 'two-row-frame' } }, required: ['kind'] } }, then: { properties: { nailRows: false } } },
+    ],
+  },
 );
 
 const Warp = closed(

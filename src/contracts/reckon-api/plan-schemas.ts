@@ -46,6 +46,8 @@ export const PLAN_SCHEMAS: Readonly<Record<string, Schema>> = {
       heightNeededMm: mm('Cloth and unwoven warp.'),
       topMm: mm('Unwoven above.'),
       bottomMm: mm('Unwoven below.'),
+      firstGapsMm: closed('Between bare ends where the first row comes to lie, by turns.', { narrow: mm('The narrow ones.'), wide: mm('The wide ones.') }),
+      spacingRows: closed('Rows of twining or scrap at each edge that set the ends even.', { fewest: count('At least.'), most: count('At most.') }),
     }),
     weft: closed('Of the yarn most rows are woven with.', {
       diameterSumMm: mm('Both yarns together, beaten down.'),
