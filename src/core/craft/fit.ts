@@ -1,16 +1,20 @@
 /** A pattern piece recomputed for a student's own loom, width and yarns. */
 import { changePiece, unknownRoles } from '#core/craft/fitting/change-piece.ts';
-import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
+import { checkMine, type MyPiece } from '#core/craft/fitting/my-piece.ts';
 import { tellChanges } from '#core/craft/fitting/tell-changes.ts';
+import { readPieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import { largestHeight, largestWidth } from '#core/craft/frame-loom/room.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
-import { succeed, type Outcome, type Problem } from '#core/outcome.ts';
+import { Fields } from '#core/craft/reading/fields.ts';
+import { Findings } from '#core/craft/reading/findings.ts';
+import { fail, succeed, type Outcome, type Problem } from '#core/outcome.ts';
 import type { Units } from '#core/units/units.ts';
 
 export type { MyPiece } from '#core/craft/fitting/my-piece.ts';
+export type { FitWay } from '#core/craft/fitting/way.ts';
 
 export interface FittedPiece {
   readonly piece: Piece;
@@ -28,20 +32,35 @@ function warnOfLostRoles(pattern: Piece, mine: MyPiece): readonly Problem[] {
   }));
 }
 
+/** A yarn that only bands she leaves out were woven with is told among the changes. */
+const isNews = (before: Outcome<Plan>) => ({ code, path }: Problem): boolean =>
+  code !== 'W_UNUSED' || !before.ok || before.warnings.some((warning) => warning.code === code && warning.path === path);
+
+/** What is wrong with either before they can be put together at all; whether the pattern can be woven is not asked. */
+function checkBoth(pattern: unknown, mine: unknown, units: Units): readonly Problem[] {
+  const findings = Findings.in(units);
+  readPieceParts(Fields.of(pattern, '', 'A piece', findings));
+  checkMine(mine, findings);
+  const read = findings.outcome(true);
+  return read.ok ? [] : read.problems;
+}
+
 /**
  * Puts a student's loom, width and yarns into the pattern and reckons it. Nails twice as
  * close as the pattern's are used every second one, and so on; shapes keep their share of
- * the width. Problems point into the changed piece (`/loom/insideWidthMm`, `/size/widthMm`,
+ * the width; the way she chose to fit it comes last. Never throws for what a person may send. Problems point into the changed piece (`/loom/insideWidthMm`, `/size/widthMm`,
  * `/warp/endsTogether`, `/yarns/<role>/…`) and, where the loom is too small, name the
  * largest size that fits.
  */
 export function fitPiece(pattern: Piece, mine: MyPiece, units: Units = 'cm'): Outcome<FittedPiece> {
+  const refused = checkBoth(pattern, mine, units);
+  if (refused.length > 0) return fail(refused);
   const piece = changePiece(pattern, mine);
   const planned = planPiece(piece, units);
   if (!planned.ok) return planned;
   const before = planPiece(pattern, units);
-  const changes = before.ok ? tellChanges({ piece: pattern, plan: before.value }, { piece, plan: planned.value }, units) : [];
-  return succeed({ piece, plan: planned.value, changes }, [...planned.warnings, ...warnOfLostRoles(pattern, mine)]);
+  const changes = before.ok ? tellChanges({ piece: pattern, plan: before.value }, { piece, plan: planned.value }, units, mine.way?.kind === 'fewer-bands' ? mine.way.leaveOut : []) : [];
+  return succeed({ piece, plan: planned.value, changes }, [...planned.warnings.filter(isNews(before)), ...warnOfLostRoles(pattern, mine)]);
 }
 
 /** The largest finished size the piece's loom holds at its spacing; the width only if the loom tells its own. */

@@ -1,11 +1,10 @@
 /** Whether a pattern fits the loom somebody typed, what it would be there, and if not, why not and what would. */
-import { roomOnLoom, fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
-import { changePiece } from '#core/craft/fitting/change-piece.ts';
+import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import { widestOn } from '#core/craft/fitting/ways-to-fit.ts';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import type { Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
-import { MM_PER_INCH } from '#core/units/inches.ts';
 import type { Units } from '#core/units/units.ts';
 import { readTypedLoom, type LoomFaults, type TypedLoom } from './typed-loom.ts';
 
@@ -16,13 +15,8 @@ export type Trial =
   /** `widest` is the piece as wide as the loom allows at this spacing; null when nothing worth weaving fits. */
   | { readonly ok: true; readonly fits: false; readonly says: string; readonly widest: FittedPiece | null };
 
-/** Narrower than this nobody would call it the same piece. */
-const LEAST_WIDTH_MM = 80;
 /** The engine's own limit: a loom on which any pattern has room. */
 const BOUNDLESS_MM = 20_000;
-const STEPS = 12;
-
-const stepMm = (units: Units): number => (units === 'in' ? MM_PER_INCH / 4 : 5);
 
 /**
  * Tries `pattern` on the loom that was typed. `title` is how the piece is spoken of. Every sentence is in the person's
@@ -55,18 +49,12 @@ interface Widest {
   readonly warnings: readonly Problem[];
 }
 
-/** The room is reckoned before the number of ends is made even, so the first width may be a step too wide. */
 function widestThatFits(pattern: Piece, onLoom: MyPiece, units: Units): Widest | null {
-  const room = roomOnLoom(changePiece(pattern, onLoom)).widthMm;
-  if (room === undefined) return null;
-  const step = stepMm(units);
-  const widest = Math.floor(room / step);
-  for (let steps = widest; steps > widest - STEPS && steps * step >= LEAST_WIDTH_MM; steps -= 1) {
-    const mine: MyPiece = { ...onLoom, widthMm: steps * step };
-    const fit = fitPiece(pattern, mine, units);
-    if (fit.ok) return { mine, fitted: fit.value, warnings: fit.warnings };
-  }
-  return null;
+  const widthMm = widestOn(pattern, onLoom, units);
+  if (widthMm === undefined) return null;
+  const mine: MyPiece = { ...onLoom, widthMm };
+  const fit = fitPiece(pattern, mine, units);
+  return fit.ok ? { mine, fitted: fit.value, warnings: fit.warnings } : null;
 }
 
 function tooWide(pattern: Piece, title: string, onLoom: MyPiece, units: Units, widestMm: number | null): string {

@@ -1,14 +1,13 @@
 import type { Dispatch } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
-import { chosenLoom, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { chosenLoom } from '#core/craft/my-piece/judge-mine.ts';
 import { loomKind } from '#core/craft/looms/looms.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Piece } from '#core/craft/piece.ts';
-import { fieldText, fieldUnit } from '#core/craft/piece-form/field-text.ts';
+import { fieldUnit } from '#core/craft/piece-form/field-text.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
-import { widestOnLoom } from '#core/craft/my-piece/widest-on-loom.ts';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { Select, UnitField } from '#islands/ui/Field.tsx';
 import type { MineEvent } from './mine-after.ts';
@@ -17,7 +16,6 @@ interface LoomFieldsProps {
   typed: TypedMine;
   pattern: Piece;
   faults: Readonly<Record<string, string>>;
-  judged: MineJudgement;
   /** With script, only what her loom asks is shown. */
   alive: boolean;
   change: Dispatch<MineEvent>;
@@ -26,7 +24,7 @@ interface LoomFieldsProps {
 const UNITS = [{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }] as const;
 
 /** Loom, width and ends. What stays empty is as in the pattern, which stands in the hint. */
-export function LoomFields({ typed, pattern, faults, judged, change, alive }: LoomFieldsProps) {
+export function LoomFields({ typed, pattern, faults, change, alive }: LoomFieldsProps) {
   const { units } = typed;
   const { insideWidthMm, insideHeightMm, nailPitchMm } = pattern.loom;
   const ofPattern: Readonly<Record<string, number | undefined>> = { insideWidthMm, insideHeightMm, nailPitchMm, widthMm: pattern.size.widthMm };
@@ -53,7 +51,6 @@ export function LoomFields({ typed, pattern, faults, judged, change, alive }: Lo
   const chooser = (asked: typeof WARPING, options: readonly { readonly value: string; readonly label: string }[], hint?: string) => (
     <Choose name={asked.key} legend={asked.label} hint={hint} value={textOf(typed.texts, asked.key)} options={options} error={faults[asked.key]} onChoose={(text) => change({ kind: 'type', key: asked.key, text })} />
   );
-  const widest = judged.ok || faults[INSIDE_WIDTH.key] === undefined ? null : widestOnLoom(typed, pattern);
   return (
     <fieldset className="stack">
       <legend className="h3">Your loom</legend>
@@ -67,12 +64,6 @@ export function LoomFields({ typed, pattern, faults, judged, change, alive }: Lo
         {lengthField(NAIL_PITCH)}
         {lengthField(WIDTH)}
       </div>
-      {widest !== null && (
-        <p className="small">
-          With this loom it can be {amountText(lengthOf(widest, 'size'), units)} wide.{' '}
-          <button type="button" className="as-link" onClick={() => change({ kind: 'type', key: WIDTH.key, text: fieldText(widest, WIDTH, units) })}>Make it so</button>
-        </p>
-      )}
       {chooser(ENDS, choice(ENDS), 'Doubled: two ends are worked as one, on a loom whose nails stand close.')}
       {(ways.length > 1 || !alive) && chooser(WARPING, alive ? ways : choice(WARPING))}
     </fieldset>

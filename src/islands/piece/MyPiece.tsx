@@ -11,6 +11,7 @@ import { Button } from '#islands/ui/Button.tsx';
 import { LoomFields } from './LoomFields.tsx';
 import { mineAfter } from './mine-after.ts';
 import { MineAnswer } from './MineAnswer.tsx';
+import { WayFields } from './WayFields.tsx';
 import { YarnFields } from './YarnFields.tsx';
 
 export interface MyPieceProps {
@@ -42,7 +43,8 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, revision,
       <form method="post" action={action} className="stack stack-wide" aria-label="My piece" noValidate>
         <input type="hidden" name="series" value={slug} />
         <input type="hidden" name="revision" value={revision} />
-        <LoomFields {...{ typed, pattern, faults, change, judged, alive }} />
+        <LoomFields {...{ typed, pattern, faults, change, alive }} />
+        <WayFields typed={settled} chosen={typed} {...{ pattern, name, change, faults }} asPattern={planned.ok ? { piece: pattern, plan: planned.value } : null} />
         <YarnFields {...{ typed, pattern, faults, change, alive }} fitted={judged.ok ? judged.fitted : null} />
         <div className="row">
           <Button type="submit" kind="act">Keep my piece</Button>

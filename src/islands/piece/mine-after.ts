@@ -1,10 +1,13 @@
 // What can be done to the typed form, apart from any screen.
+import { WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
+import type { WayId } from '#core/craft/fitting/ways-to-fit.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Units } from '#core/units/units.ts';
 
 export type MineEvent =
   | { readonly kind: 'type'; readonly key: string; readonly text: string }
+  | { readonly kind: 'leave-out'; readonly key: string; readonly isOut: boolean }
   | { readonly kind: 'type-yarn'; readonly role: string; readonly key: string; readonly text: string }
   | { readonly kind: 'units'; readonly units: Units }
   | { readonly kind: 'as-pattern'; readonly pattern: Piece };
@@ -13,6 +16,9 @@ export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
   switch (event.kind) {
     case 'type':
       return { ...typed, texts: { ...typed.texts, [event.key]: event.text } };
+    case 'leave-out':
+      // Who ticks a band means to choose for herself.
+      return { ...typed, texts: { ...typed.texts, [WAY_KEY]: 'leave-chosen' satisfies WayId, [event.key]: event.isOut ? 'yes' : '' } };
     case 'type-yarn':
       return { ...typed, yarns: { ...typed.yarns, [event.role]: { ...yarnOf(typed, event.role), [event.key]: event.text } } };
     case 'units':

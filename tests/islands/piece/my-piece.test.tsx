@@ -32,11 +32,29 @@ describe('my piece', () => {
     expect(screen.getByRole('status').textContent).toBe('One thing does not work yet');
   });
 
-  test('a loom that is too narrow offers the width that fits, and takes it in one press', async () => {
+  test('a loom that is too narrow offers the ways to fit the piece, and takes one in one press', async () => {
     render(<MyPiece {...props} />);
+    expect(screen.queryByRole('group', { name: 'How to fit it to your loom' })).toBeNull();
     type('Inside width', '30');
-    await userEvent.click(screen.getByRole('button', { name: 'Make it so' }));
+    await userEvent.click(screen.getByRole('radio', { name: /^Narrower/ }));
     expect(screen.getByRole('status').textContent).toBe('It fits your loom');
+    expect(screen.getByText(/The piece is .* wide instead of/)).toBeDefined();
+  });
+
+  test('on a loom that is too low she may tick the bands to leave out', async () => {
+    render(<MyPiece {...props} />);
+    type('Inside height', '45');
+    expect(screen.getByRole('status').textContent).toContain('does not work yet');
+    await userEvent.click(screen.getByRole('checkbox', { name: /^dunes/ }));
+    expect(screen.getByRole('radio', { name: /^Lower, without bands you choose/ })).toHaveProperty('checked', true);
+    expect(screen.getByRole('status').textContent).toBe('It fits your loom');
+    expect(screen.getAllByText(/^Left out: dunes\./).length).toBeGreaterThan(0);
+  });
+
+  test('without script the ways stand in the form, with what each comes to', () => {
+    const markup = renderToString(<MyPiece {...props} typed={typeMine({ loom: { insideHeightMm: 450 } }, pattern, 'cm')} />);
+    for (const way of ['as-it-is', 'leave-last', 'scaled']) expect(markup).toContain(`value="${way}"`);
+    expect(markup).toContain('name="leaveOut.dunes"');
   });
 
   test('her own yarn changes how much is needed', async () => {

@@ -1,10 +1,13 @@
 /** The pattern with a student's own loom, width and yarns put in. Nothing is reckoned yet. */
+import { coarsen } from '#core/craft/fitting/coarsen.ts';
+import { leaveOut } from '#core/craft/fitting/leave-out.ts';
 import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
 import { layoutOf } from '#core/craft/frame-loom/room.ts';
 import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
-import type { Band, Loom, Piece, Shape, Warp, Yarn } from '#core/craft/piece.ts';
-
-const isAboveZero = (x: number | undefined): x is number => x !== undefined && Number.isFinite(x) && x > 0;
+import { scalePiece } from '#core/craft/fitting/scale-piece.ts';
+import type { FitWay } from '#core/craft/fitting/way.ts';
+import { isAboveZero, widen } from '#core/craft/fitting/widen.ts';
+import type { Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
 
 /**
  * Which nails of her own loom come closest to the pattern's spacing: a loom with nails
@@ -32,37 +35,15 @@ function changeLoom(pattern: Loom, mine: MyPiece['loom']): Loom {
   return nth === 1 ? allNails : { ...allNails, everyNthNail: nth };
 }
 
+/** Leaving out bands alone needs no other ends. */
+const keepsEnds = (way: FitWay | undefined): boolean => way === undefined || (way.kind === 'fewer-bands' && way.widthMm === undefined);
+
 /** The pattern pins its ends for its own loom; on another one they are reckoned anew. */
 function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
   const own = { ...warp, ...(mine.endsTogether === undefined ? {} : { endsTogether: mine.endsTogether }) };
   const { kind, nailRows, nailPitchMm, warping } = mine.loom ?? {};
   const asPinned = [mine.widthMm, mine.endsTogether, kind, nailRows, nailPitchMm, warping].every((own) => own === undefined);
-  return endCount !== undefined && asPinned ? { ...own, endCount } : own;
-}
-
-function narrowMeasures(shape: Shape, scale: number): Shape {
-  switch (shape.shape) {
-    case 'circle':
-      return { ...shape, radiusMm: shape.radiusMm * Math.min(1, scale) };
-    case 'points':
-      return { ...shape, points: shape.points.map(({ xMm, yMm }) => ({ xMm: xMm * scale, yMm })) };
-    default:
-      return { ...shape, baseMm: shape.baseMm * scale };
-  }
-}
-
-/** Shapes keep their place and their share of the width; how high they stand stays, but a circle stays round. */
-function narrowShape(shape: Shape, scale: number): Shape {
-  return {
-    ...narrowMeasures(shape, scale),
-    ...(shape.centreMm === undefined ? {} : { centreMm: shape.centreMm * scale }),
-    ...(shape.leanMm === undefined ? {} : { leanMm: shape.leanMm * scale }),
-  };
-}
-
-function narrowBand(band: Band, scale: number): Band {
-  if (band.technique !== 'tabby' || band.shapes === undefined) return band;
-  return { ...band, shapes: band.shapes.map((shape) => narrowShape(shape, scale)) };
+  return endCount !== undefined && asPinned && keepsEnds(mine.way) ? { ...own, endCount } : own;
 }
 
 /** Her yarn takes the pattern's colour where she has not said her own, so that the picture stays readable. */
@@ -80,19 +61,30 @@ export function unknownRoles(pattern: Piece, mine: MyPiece): readonly string[] {
   return Object.keys(mine.yarns ?? {}).filter((role) => !Object.hasOwn(pattern.yarns, role));
 }
 
-/** Whatever a student typed goes in as it is; planning the piece tells what is wrong with it. */
+function fitInWay(piece: Piece, way: FitWay): Piece {
+  switch (way.kind) {
+    case 'narrower':
+      return widen(piece, way.widthMm);
+    case 'fewer-bands':
+      return leaveOut(way.widthMm === undefined ? piece : widen(piece, way.widthMm), way.leaveOut, way.heightMm);
+    case 'coarser':
+      return coarsen(piece, way);
+    case 'scaled':
+      return scalePiece(piece, way.factor);
+  }
+}
+
+/**
+ * `pattern` must have been read. Whatever a student typed goes in as it is, her way of fitting it last; planning the
+ * piece tells what is wrong with it.
+ */
 export function changePiece(pattern: Piece, mine: MyPiece): Piece {
-  const widthMm = mine.widthMm ?? pattern.size.widthMm;
-  const scale = isAboveZero(mine.widthMm) ? mine.widthMm / pattern.size.widthMm : 1;
-  const { dowel } = pattern;
-  const lengthMm = dowel?.lengthMm === undefined ? undefined : dowel.lengthMm + (scale - 1) * pattern.size.widthMm;
-  return {
+  const changed: Piece = {
     ...pattern,
-    size: { ...pattern.size, widthMm },
     loom: changeLoom(pattern.loom, mine.loom),
     warp: changeWarp(pattern.warp, mine),
-    ...(dowel === undefined ? {} : { dowel: lengthMm === undefined ? dowel : { ...dowel, lengthMm } }),
     yarns: changeYarns(pattern.yarns, mine.yarns ?? {}),
-    bands: scale === 1 ? pattern.bands : pattern.bands.map((band) => narrowBand(band, scale)),
   };
+  const wide = mine.widthMm === undefined ? changed : widen(changed, mine.widthMm);
+  return mine.way === undefined ? wide : fitInWay(wide, mine.way);
 }

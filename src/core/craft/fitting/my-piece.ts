@@ -1,5 +1,9 @@
 /** What a student says of her own making; what is missing stays as in the pattern. */
 import type { EndsTogether, LoomKindName, NailRows, Warping, Yarn } from '#core/craft/piece.ts';
+import { readWay, type FitWay } from '#core/craft/fitting/way.ts';
+import { LOOM_KIND_NAMES, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
+import { Fields } from '#core/craft/reading/fields.ts';
+import type { Findings } from '#core/craft/reading/findings.ts';
 
 export interface MyPiece {
   readonly loom?: {
@@ -14,4 +18,24 @@ export interface MyPiece {
   readonly endsTogether?: EndsTogether;
   /** Her own yarn in a role of the pattern. */
   readonly yarns?: Readonly<Record<string, Yarn>>;
+  /** How the pattern is fitted to her loom. */
+  readonly way?: FitWay;
+}
+
+/**
+ * Refuses what is not made like a student's piece at all. Its measures go on as they are:
+ * reckoning the piece tells what is wrong with them.
+ */
+export function checkMine(mine: unknown, findings: Findings): void {
+  const fields = Fields.of(mine, '', 'What a student says of her piece', findings);
+  const loom = fields.optionalGroup('loom', 'Loom');
+  loom?.optionalChoice('kind', 'Kind of loom', LOOM_KIND_NAMES);
+  loom?.optionalChoice('nailRows', 'Rows of nails', NAIL_ROW_NAMES);
+  fields.take('widthMm');
+  fields.take('endsTogether');
+  const yarns = fields.optionalGroup('yarns', 'The group of yarns');
+  for (const [role] of yarns?.entries() ?? []) yarns?.group(role, 'Yarn');
+  const way = fields.take('way');
+  if (way !== undefined) readWay(way, fields);
+  fields.end();
 }

@@ -1,6 +1,8 @@
 /** How a student's piece differs from the pattern, in words. */
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import { fills } from '#core/craft/fitting/leave-out.ts';
+import { bandKey } from '#core/craft/fitting/way.ts';
+import type { Band, Piece } from '#core/craft/piece.ts';
+import type { BandPlan, Plan } from '#core/craft/plan-types.ts';
 import { lengthOf, type LengthUse } from '#core/craft/amounts/amount-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { loomKind } from '#core/craft/looms/looms.ts';
@@ -14,33 +16,90 @@ export interface Made {
 /** A difference that cannot be seen is none. */
 const SAME_MM = 0.05;
 
-const ORDINALS = ['second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth', 'ninth', 'tenth'];
+const ORDINALS = ['first', 'second', 'third', 'fourth', 'fifth', 'sixth', 'seventh', 'eighth', 'ninth', 'tenth'];
+
+const ordinal = (place: number): string => ORDINALS[place - 1] ?? `${String(place)}th`;
+
+/** `dark shore`, or `the third band` for one without a name. */
+export function bandWords(band: { readonly name?: string }, index: number): string {
+  return band.name === undefined ? `the ${ordinal(index + 1)} band` : band.name.replaceAll('-', ' ');
+}
+
+/** `a, b and c` */
+export function listed(words: readonly string[]): string {
+  return words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;
+}
 
 function nailWords({ loom }: Piece): string {
   const nth = loom.everyNthNail ?? 1;
   const inner = loomKind(loom).rows === 2 && loom.nailRows === 'inner' ? 'inner ' : '';
   const nail = `${inner}${loomKind(loom).holder.one}`;
-  return nth === 1 ? `every ${nail}` : `every ${ORDINALS[nth - 2] ?? `${String(nth)}th`} ${nail}`;
+  return nth === 1 ? `every ${nail}` : `every ${ordinal(nth)} ${nail}`;
 }
 
-function picksOf(plan: Plan): number {
-  return plan.bands.reduce((sum, { picks }) => sum + (picks ?? 0), 0);
+const sumOf = (plan: Plan, of: (band: BandPlan) => number | undefined): number => plan.bands.reduce((sum, band) => sum + (of(band) ?? 0), 0);
+
+function soumakRows({ bands }: Piece): number {
+  return bands.reduce((sum, band) => sum + (band.technique === 'soumak' ? band.rows : 0), 0);
 }
+
+/** Two roles may have yarn of one name, so the role is told with it. */
+const yarnName = (role: string, label: string | undefined): string => (label === undefined ? `the ${role} yarn` : `${label} (${role})`);
 
 function tellYarns(before: Piece, after: Piece): string[] {
-  return Object.entries(after.yarns).flatMap(([role, yarn]) =>
-    yarn === before.yarns[role] ? [] : [`${yarn.label ?? 'Your own yarn'} is the ${role} yarn.`],
-  );
+  return Object.entries(after.yarns).flatMap(([role, yarn]) => {
+    const was = before.yarns[role];
+    if (yarn === was) return [];
+    const strands = yarn.strands ?? 1;
+    const isOwn = was === undefined || JSON.stringify({ ...yarn, strands }) !== JSON.stringify({ ...was, strands });
+    const own = isOwn ? [`${yarn.label ?? 'Your own yarn'} is the ${role} yarn.`] : [];
+    if (strands === (was?.strands ?? 1)) return own;
+    const together = strands === 1 ? 'Take a single strand' : `Take ${String(strands)} strands`;
+    return [...own, `${together} of ${yarnName(role, yarn.label)}${strands === 1 ? '' : ' together'} instead of ${String(was?.strands ?? 1)}.`];
+  });
 }
 
-/** One sentence for each thing that is not as in the pattern. */
-export function tellChanges(before: Made, after: Made, units: Units): readonly string[] {
-  const told: string[] = [];
+function tellUnused(before: Made, after: Made): string[] {
+  return Object.keys(after.piece.yarns).flatMap((role) => {
+    const isNeeded = ({ plan }: Made): boolean => (plan.yarns[role]?.netMm ?? 0) > 0;
+    return isNeeded(before) && !isNeeded(after) ? [`No ${yarnName(role, after.piece.yarns[role]?.label).replace(/^the /u, '')} is needed.`] : [];
+  });
+}
+
+interface TwoBands {
+  readonly words: string;
+  readonly was: { readonly band: Band; readonly plan: BandPlan };
+  /** Missing where the band is left out. */
+  readonly is: { readonly band: Band; readonly plan: BandPlan } | undefined;
+}
+
+/** What is not left out stands in the same order in both. */
+function pairBands(before: Made, after: Made, leftOut: readonly string[]): readonly TwoBands[] {
+  let place = 0;
+  return before.piece.bands.flatMap((band, index): TwoBands[] => {
+    const plan = before.plan.bands[index];
+    if (plan === undefined) return [];
+    const words = bandWords(band, index);
+    const was = { band, plan };
+    if (leftOut.includes(bandKey(band, index))) return [{ words, was, is: undefined }];
+    const [now, planned] = [after.piece.bands[place], after.plan.bands[place]];
+    place += 1;
+    return now === undefined || planned === undefined ? [] : [{ words, was, is: { band: now, plan: planned } }];
+  });
+}
+
+const sentence = (words: string): string => `${words.charAt(0).toUpperCase()}${words.slice(1)}`;
+
+/** In the person's units; nothing where the difference cannot be seen. */
+type TellLength = (was: number, is: number, use: LengthUse, words: (is: string, was: string) => string) => string[];
+
+function lengthTeller(units: Units): TellLength {
   const length = (mm: number, use: LengthUse): string => amountText(lengthOf(mm, use), units);
-  const tellLength = (was: number, is: number, use: LengthUse, words: (is: string, was: string) => string): void => {
-    if (Math.abs(is - was) > SAME_MM) told.push(words(length(is, use), length(was, use)));
-  };
-  tellLength(before.piece.size.widthMm, after.piece.size.widthMm, 'size', (is, was) => `The piece is ${is} wide instead of ${was}.`);
+  return (was, is, use, words) => (Math.abs(is - was) > SAME_MM ? [words(length(is, use), length(was, use))] : []);
+}
+
+function tellWarp(before: Made, after: Made, tellLength: TellLength): string[] {
+  const told: string[] = [];
   const [kindBefore, kind] = [loomKind(before.piece.loom), loomKind(after.piece.loom)];
   if (kind !== kindBefore) told.push(kind.dressing);
   if (after.piece.loom.warping !== before.piece.loom.warping) {
@@ -50,13 +109,46 @@ export function tellChanges(before: Made, after: Made, units: Units): readonly s
   if ((after.piece.warp.endsTogether ?? 1) !== (before.piece.warp.endsTogether ?? 1)) {
     told.push(after.piece.warp.endsTogether === 2 ? 'Two ends are worked together as one.' : 'Each end is worked by itself.');
   }
-  tellLength(before.plan.ends.spacingMm, after.plan.ends.spacingMm, 'fine', (is, was) => `Ends stand ${is} apart instead of ${was}.`);
+  told.push(...tellLength(before.plan.ends.spacingMm, after.plan.ends.spacingMm, 'fine', (is, was) => `Ends stand ${is} apart instead of ${was}.`));
   if (after.plan.ends.count !== before.plan.ends.count) {
     told.push(`There are ${String(after.plan.ends.count)} ends instead of ${String(before.plan.ends.count)}.`);
   }
-  told.push(...tellYarns(before.piece, after.piece));
-  if (picksOf(after.plan) !== picksOf(before.plan)) {
-    told.push(`${String(picksOf(before.plan))} rows of tabby become ${String(picksOf(after.plan))}.`);
-  }
   return told;
+}
+
+function tellBands(before: Made, after: Made, leftOut: readonly string[], tellLength: TellLength): string[] {
+  const pairs = pairBands(before, after, leftOut);
+  const gone = pairs.filter(({ is }) => is === undefined).map(({ words }) => words);
+  const isOtherHeight = Math.abs(after.piece.size.heightMm - before.piece.size.heightMm) > SAME_MM;
+  const measures = pairs.flatMap(({ words, was, is }) => {
+    if (is === undefined) return [];
+    if (isOtherHeight && fills(is.band)) return tellLength(was.plan.heightMm, is.plan.heightMm, 'size', (now, then) => sentence(`${words}: ${now} high instead of ${then}.`));
+    if (was.band.technique !== 'rya' || is.band.technique !== 'rya') return [];
+    return tellLength(was.band.pileMm, is.band.pileMm, 'size', (now, then) => sentence(`${words}: ${now} long instead of ${then}.`));
+  });
+  return [...(gone.length === 0 ? [] : [`Left out: ${listed(gone)}.`]), ...tellUnused(before, after), ...measures];
+}
+
+/** What is not woven any more is told with the bands that are left out. */
+function tellCounts(before: Made, after: Made): string[] {
+  const count = (of: (made: Made) => number, words: string): string[] =>
+    of(after) === of(before) || of(after) === 0 ? [] : [`${String(of(before))} ${words} become ${String(of(after))}.`];
+  return [
+    ...count(({ plan }) => sumOf(plan, ({ picks }) => picks), 'rows of tabby'),
+    ...count(({ piece }) => soumakRows(piece), 'rows of soumak'),
+    ...count(({ plan }) => sumOf(plan, ({ knots }) => knots), 'knots'),
+  ];
+}
+
+/** One sentence for each thing that is not as in the pattern. `leftOut` are the keys of bands of `before` that are not woven. */
+export function tellChanges(before: Made, after: Made, units: Units, leftOut: readonly string[] = []): readonly string[] {
+  const tellLength = lengthTeller(units);
+  return [
+    ...tellLength(before.piece.size.widthMm, after.piece.size.widthMm, 'size', (is, was) => `The piece is ${is} wide instead of ${was}.`),
+    ...tellLength(before.piece.size.heightMm, after.piece.size.heightMm, 'size', (is, was) => `The piece is ${is} high instead of ${was}.`),
+    ...tellWarp(before, after, tellLength),
+    ...tellYarns(before.piece, after.piece),
+    ...tellBands(before, after, leftOut, tellLength),
+    ...tellCounts(before, after),
+  ];
 }

@@ -26,7 +26,7 @@ function rolesToLay({ inPicks, named }: UsedRoles): ReadonlySet<string> {
   return inPicks.size > 0 ? inPicks : new Set([...named].slice(0, 1));
 }
 
-function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: UsedRoles, findings: Findings): DressedLoom | undefined {
+export function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: UsedRoles, findings: Findings): DressedLoom | undefined {
   const { size, beat, mode } = parts;
   if (size === undefined || beat === undefined) return undefined;
   const threads = threadsOf(parts.yarns);
@@ -42,7 +42,7 @@ function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: U
   };
 }
 
-function settingsFrom({ allowances, mode, beat }: PieceParts): Settings | undefined {
+export function settingsFrom({ allowances, mode, beat }: PieceParts): Settings | undefined {
   // A refused beat only leaves the margin's default open, which checking fit does not need.
   return allowances === undefined ? undefined : settingsOf(allowances, mode, beat ?? { picksPerWeftDiameter: 1 });
 }

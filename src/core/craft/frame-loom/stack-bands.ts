@@ -43,7 +43,7 @@ export function collectRoles(bands: readonly (Band | undefined)[], known: Readon
 }
 
 /** Whether all a band is made of is sound, so that its own measures can be looked at. */
-function isReady(band: Band, loom: DressedLoom): boolean {
+export function isReady(band: Band, loom: DressedLoom): boolean {
   return rolesOf(band).every(({ role, inPicks }) => loom.threads.has(role) && (!inPicks || loom.picks.has(role)));
 }
 

@@ -47,6 +47,11 @@ export const ENDS: Asked = {
 
 export const CHOICES: readonly Asked[] = [LOOM_KIND, NAIL_ROWS, WARPING, ENDS];
 
+/** How the pattern is fitted to a loom that is not like its own. */
+export const WAY_KEY = 'way';
+/** Fields of bands she would rather leave out: `leaveOut.<key of the band>`. */
+export const LEAVE_OUT = 'leaveOut.';
+
 /** Her yarn is said in the ways a label says it, or by wraps where there is none. */
 export const AS_PATTERN = 'pattern';
 const WAYS: ReadonlySet<string> = new Set(['metresPer100g', 'tex', 'nm', 'ne-cotton', 'ne-worsted', 'wraps', 'class']);

@@ -1,17 +1,18 @@
 /** What a student's form comes to: her own piece with its plan, or a sentence at every field that stands in the way. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import { waysToFit, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import type { EndsTogether, LoomKindName, NailRows, Piece, Warping } from '#core/craft/piece.ts';
 import { readText } from '#core/craft/piece-form/field-text.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { present } from '#core/craft/reading/present.ts';
-import type { Problem } from '#core/outcome.ts';
+import type { Outcome, Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from './asked-of-mine.ts';
-import { isOwnYarn, yarnOf, type TypedMine } from './typed-mine.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, type AskedLength } from './asked-of-mine.ts';
+import { isOwnYarn, leftOutBy, wayOf, yarnOf, type TypedMine } from './typed-mine.ts';
 
 export interface MineFound {
   /** Name of the field it is about; '' for what belongs to no single one. */
@@ -25,12 +26,25 @@ export type MineJudgement =
 
 export function judgeMine(typed: TypedMine, pattern: Piece): MineJudgement {
   const faults = new Map<string, string>();
-  const mine = readMine(typed, pattern, faults);
-  const fitted = fitPiece(pattern, mine, typed.units);
+  const { mine, outcome: fitted } = inHerWay(typed, pattern, readMine(typed, pattern, faults));
   if (fitted.ok && faults.size === 0) return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern) };
   const own = [...faults].map(([field, says]): MineFound => ({ field, says }));
   const engine = fitted.ok ? [] : placed(fitted.problems, pattern).filter(({ field }) => !faults.has(field));
   return { ok: false, problems: [...own, ...onePerField(engine)] };
+}
+
+/** What she typed of her piece without the way of fitting it, and every way there is. */
+export function waysOf(typed: TypedMine, pattern: Piece): { readonly mine: MyPiece; readonly ways: readonly WayToFit[] } {
+  const mine = readMine(typed, pattern, new Map());
+  return { mine, ways: waysToFit(pattern, mine, typed.units, leftOutBy(typed, pattern)) };
+}
+
+/** A way that her loom does not call for any more falls away. */
+function inHerWay(typed: TypedMine, pattern: Piece, mine: MyPiece): { readonly mine: MyPiece; readonly outcome: Outcome<FittedPiece> } {
+  const id = wayOf(typed);
+  const chosen = id === 'as-it-is' ? undefined : waysToFit(pattern, mine, typed.units, leftOutBy(typed, pattern)).find((way) => way.id === id);
+  if (chosen === undefined) return { mine, outcome: fitPiece(pattern, mine, typed.units) };
+  return { mine: present({ ...mine, way: chosen.way }), outcome: chosen.outcome };
 }
 
 function onePerField(found: readonly MineFound[]): MineFound[] {
@@ -106,6 +120,8 @@ function readYarns(typed: TypedMine, pattern: Piece, faults: Map<string, string>
 }
 
 const FIELD_OF: Readonly<Record<string, string>> = {
+  '/loom': WAY_KEY,
+  '/bands': WAY_KEY,
   '/loom/insideWidthMm': INSIDE_WIDTH.key,
   '/loom/insideHeightMm': INSIDE_HEIGHT.key,
   '/loom/nailPitchMm': NAIL_PITCH.key,

@@ -3,6 +3,8 @@
  * was typed. Fields are called `insideWidthMm`, `endsTogether`, `yarns.<role>.grist` …
  */
 import type { MyPiece } from '#core/craft/fit.ts';
+import { bandKey } from '#core/craft/fitting/way.ts';
+import { WAY_IDS, wayIdOf, type WayId } from '#core/craft/fitting/ways-to-fit.ts';
 import type { Piece, Yarn } from '#core/craft/piece.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { DEFAULT_KIND } from '#core/craft/looms/looms.ts';
@@ -11,7 +13,7 @@ import { gristTexts } from '#core/craft/piece-form/type-piece.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
-import { AS_PATTERN, CHOICES, ENDS, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARPING, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+import { AS_PATTERN, CHOICES, ENDS, LEAVE_OUT, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
 
 export interface TypedMine {
   /** Those of lengths that name no unit themselves. */
@@ -23,6 +25,25 @@ export interface TypedMine {
 
 export const yarnOf = (typed: TypedMine, role: string): Texts => (Object.hasOwn(typed.yarns, role) ? (typed.yarns[role] ?? {}) : {});
 export const isOwnYarn = (texts: Texts): boolean => !['', AS_PATTERN].includes(textOf(texts, 'by'));
+
+/** Names of the fields in which bands are left out, in the order of the pattern's bands. */
+export const leaveOutNames = (pattern: Piece): readonly string[] => pattern.bands.map((band, index) => `${LEAVE_OUT}${bandKey(band, index)}`);
+
+/** The way she chose; the pattern as it is where she chose none. */
+export function wayOf(typed: TypedMine): WayId {
+  const text = textOf(typed.texts, WAY_KEY);
+  return WAY_IDS.find((id) => id === text) ?? 'as-it-is';
+}
+
+/** Keys of the bands she ticked to be left out. */
+export function leftOutBy(typed: TypedMine, pattern: Piece): readonly string[] {
+  return leaveOutNames(pattern).filter((name) => textOf(typed.texts, name) === 'yes').map((name) => name.slice(LEAVE_OUT.length));
+}
+
+function wayTexts({ way }: MyPiece): Texts {
+  const leftOut = way?.kind === 'fewer-bands' && way.from === undefined ? way.leaveOut : [];
+  return { [WAY_KEY]: wayIdOf(way), ...Object.fromEntries(leftOut.map((key) => [`${LEAVE_OUT}${key}`, 'yes'])) };
+}
 
 function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
   // Until she says otherwise, her yarn is as many strands of the same colour.
@@ -43,6 +64,7 @@ export function typeMine(mine: MyPiece, pattern: Piece, units: Units): TypedMine
       nailRows: fieldText(mine.loom?.nailRows ?? pattern.loom.nailRows ?? 'both', NAIL_ROWS, units),
       warping: fieldText(mine.loom?.warping ?? pattern.loom.warping, WARPING, units),
       endsTogether: fieldText(mine.endsTogether ?? pattern.warp.endsTogether ?? 1, ENDS, units),
+      ...wayTexts(mine),
     },
     yarns: Object.fromEntries(Object.entries(pattern.yarns).map(([role, yarn]) => [role, yarnTexts(mine.yarns?.[role], yarn, units)])),
   };
@@ -55,7 +77,7 @@ export function mineOfFields(ask: (name: string) => string | undefined, pattern:
   const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
-    texts: Object.fromEntries([...LENGTHS, ...CHOICES].map(({ key }) => [key, text(key)])),
+    texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), WAY_KEY, ...leaveOutNames(pattern)].map((key) => [key, text(key)])),
     yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, Object.fromEntries(YARN_KEYS.map((key) => [key, text(`yarns.${role}.${key}`)]))])),
   };
   // Without script she chooses other units and sends the form in one go; what she typed belongs to what she saw.

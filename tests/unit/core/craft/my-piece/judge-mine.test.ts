@@ -1,7 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { judgeMine, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
 import { inOtherUnits, mineOfFields, typeMine, withTriedLoom } from '#core/craft/my-piece/typed-mine.ts';
-import { widestOnLoom } from '#core/craft/my-piece/widest-on-loom.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 
 const pattern = await lowTide();
@@ -94,10 +93,40 @@ test('the loom that was tried before buying stands in the form', () => {
   expect(judgeMine(after, pattern).ok).toBe(true);
 });
 
-test('the widest that fits does fit, and nothing is offered where nothing would', () => {
-  const narrow = typed({ insideWidthMm: '28', nailPitchMm: '8', endsTogether: '2' });
-  const widest = widestOnLoom(narrow, pattern);
-  expect(widest).not.toBeNull();
-  expect(judgeMine({ ...narrow, texts: { ...narrow.texts, widthMm: `${String(widest)} mm` } }, pattern).ok).toBe(true);
-  expect(widestOnLoom(typed({ insideWidthMm: '6' }), pattern)).toBeNull();
+describe('a loom of another size', () => {
+  const LOW = { insideHeightMm: '42', units: 'cm', shown: 'cm' };
+
+  test('is refused at its field until a way is chosen', () => {
+    expect(Object.keys(says(LOW))).toEqual(['insideHeightMm']);
+    expect(judge({ ...LOW, way: 'as-it-is' }).ok).toBe(false);
+  });
+
+  test.each(['leave-last', 'leave-first', 'scaled'])('is fitted by %s, which is kept with its measures and comes back the same', (way) => {
+    const judged = judge({ ...LOW, way });
+    if (!judged.ok) throw new Error(JSON.stringify(judged.problems));
+    expect(judged.mine.way?.kind).toBe(way === 'scaled' ? 'scaled' : 'fewer-bands');
+    expect(judged.fitted.plan.loom.heightNeededMm).toBeLessThanOrEqual(420);
+    const again = judgeMine(typeMine(judged.mine, pattern, 'cm'), pattern);
+    expect(again.ok && again.mine).toEqual(judged.mine);
+  });
+
+  test('leaves out the bands she ticks, and says so when that is not enough', () => {
+    const judged = judge({ ...LOW, way: 'leave-chosen', 'leaveOut.dunes': 'yes' });
+    expect(judged).toMatchObject({ ok: true, mine: { way: { kind: 'fewer-bands', leaveOut: ['dunes'] } } });
+    expect(says({ ...LOW, way: 'leave-chosen' })['way']).toBe('Tick the bands you would rather do without.');
+    expect(says({ ...LOW, insideHeightMm: '30', way: 'leave-chosen', 'leaveOut.foot': 'yes' })['insideHeightMm']).toContain('Choose other bands');
+  });
+
+  test('a way that does not help is refused with the reason', () => {
+    expect(says({ ...LOW, way: 'doubled' })['insideHeightMm']).toContain('The loom is 42 cm high inside.');
+  });
+
+  test('a way that the loom does not call for any more falls away', () => {
+    expect(judge({ way: 'narrower' })).toMatchObject({ ok: true, mine: {} });
+  });
+
+  test('narrower makes it as wide as the loom holds', () => {
+    const judged = judge({ insideWidthMm: '28', nailPitchMm: '8', endsTogether: '2', way: 'narrower' });
+    expect(judged.ok && judged.fitted.plan.loom.insideWidthNeededMm).toBeLessThanOrEqual(280);
+  });
 });
