@@ -8,7 +8,7 @@ import { bulgeArc } from '#core/craft/techniques/roving.ts';
 import { bundlesOf, hemStitchLength } from '#core/craft/techniques/hem-stitch.ts';
 import { loopLength, loopRow } from '#core/craft/techniques/loop-pile.ts';
 import { ryaBundle, ryaCutLength, ryaKnotsPerRow, ryaWrap, windingCard } from '#core/craft/techniques/rya.ts';
-import { soumakRatio, soumakStitch, soumakStitchesPerRow } from '#core/craft/techniques/soumak.ts';
+import { soumakRatio, soumakRowLength, soumakStitch, soumakStitchesPerRow } from '#core/craft/techniques/soumak.ts';
 import { ellipticE, twiningRatio } from '#core/craft/techniques/twining.ts';
 import { PACE } from '#core/craft/defaults.ts';
 import { rovingDiameter, texFromGramsPerMetre } from '#core/craft/yarn/roving.ts';
@@ -31,6 +31,12 @@ describe('soumak', () => {
     const small = { ...stitch, over: 2, back: 1 };
     expectClose(soumakStitch(small), 18.15724, 1e-6);
     expectClose(soumakRatio(small), 3.63145, 1e-5);
+  });
+
+  test('an end left over beyond the last whole stitch takes a stitch over three, back two (added up)', () => {
+    const whole = 29 * soumakStitch(stitch);
+    expectClose(soumakRowLength(stitch, 61), whole + (3 + 2 - 2) * 5 + Math.PI * 4.18807977, 1e-12);
+    expectClose(soumakRowLength(stitch, 62), 30 * soumakStitch(stitch), 1e-12);
   });
 
   test('with a yarn as thick as 2p/π it takes exactly (over + back)/(over − back) (weavers’ rule)', () => {

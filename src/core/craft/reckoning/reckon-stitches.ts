@@ -13,9 +13,9 @@ import {
   TRIM,
   windingCard,
 } from '#core/craft/techniques/rya.ts';
-import { readOverAndBack, soumakRatio, soumakStitch, soumakStitchesPerRow } from '#core/craft/techniques/soumak.ts';
+import { readOverAndBack, soumakRatio, soumakRowLength, soumakStitch, soumakStitchesPerRow } from '#core/craft/techniques/soumak.ts';
 
-/** The row is without its two tails. */
+/** The row is with its shorter last stitch, if it has one, and without its two tails; the stitches are the whole ones. */
 export interface SoumakAnswer {
   readonly stitchMm: number;
   readonly ratio: number;
@@ -39,7 +39,7 @@ export function reckonSoumak(fields: Fields): SoumakAnswer | undefined {
   }
   const stitchMm = soumakStitch(read);
   const stitches = soumakStitchesPerRow(read.ends, read.over, read.back);
-  return { stitchMm, ratio: soumakRatio(read), stitches, rowMm: stitches * stitchMm };
+  return { stitchMm, ratio: soumakRatio(read), stitches, rowMm: soumakRowLength(read, read.ends) };
 }
 
 export interface RyaAnswer {

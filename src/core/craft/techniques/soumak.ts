@@ -46,6 +46,19 @@ export function soumakStitchesPerRow(ends: number, over: number, back: number): 
   return Math.floor((ends - over) / (over - back)) + 1;
 }
 
+/** Ends beyond the last whole stitch: they take one shorter stitch, over themselves and the ends it goes back under. */
+export function soumakRest(ends: number, over: number, back: number): number {
+  return (ends - over) % (over - back);
+}
+
+/** Weft of one row over this many ends, without its tails. Needs `ends` ≥ over. */
+export function soumakRowLength(stitch: SoumakStitch, ends: number): number {
+  const { over, back } = stitch;
+  const rest = soumakRest(ends, over, back);
+  const last = rest === 0 ? 0 : soumakStitch({ ...stitch, over: back + rest });
+  return soumakStitchesPerRow(ends, over, back) * soumakStitch(stitch) + last;
+}
+
 const OVER: NumberRule = { name: 'Ends passed over', min: 2, max: 100, whole: true };
 const BACK: NumberRule = { name: 'Ends gone back under', min: 1, max: 99, whole: true };
 const TABBY_BETWEEN: NumberRule = { name: 'Picks of tabby between rows', min: 0, max: 100, whole: true };
@@ -84,7 +97,7 @@ function check(band: SoumakBand, _heightMm: number, loom: DressedLoom, report: B
     report.reject('E_FIT', 'over', `The warp has ${String(loom.workingEnds)} ends to work with. Pass over fewer.`);
     return;
   }
-  if ((loom.workingEnds - band.over) % (band.over - band.back) !== 0) {
+  if (soumakRest(loom.workingEnds, band.over, band.back) > 0) {
     report.warn('W_SHORT_STITCH', 'over', 'The last stitch of each row comes out shorter than the others.');
   }
 }
@@ -92,8 +105,8 @@ function check(band: SoumakBand, _heightMm: number, loom: DressedLoom, report: B
 function weave(band: SoumakBand, _heightMm: number, loom: DressedLoom): Woven {
   const thread = threadOn(loom, band.yarn);
   const perRow = soumakStitchesPerRow(loom.workingEnds, band.over, band.back);
-  const stitchMm = soumakStitch({ over: band.over, back: band.back, spacingMm: loom.spacingMm, diameterSumMm: loftSum(loom, thread) });
-  const soumak = rowsOf(band.yarn, 'by-the-row', band.rows, perRow * stitchMm + 2 * loom.tailMm, thread);
+  const stitch = { over: band.over, back: band.back, spacingMm: loom.spacingMm, diameterSumMm: loftSum(loom, thread) };
+  const soumak = rowsOf(band.yarn, 'by-the-row', band.rows, soumakRowLength(stitch, loom.workingEnds) + 2 * loom.tailMm, thread);
   const stitches = band.rows * perRow;
   const picks = tabbyPicks(band);
   if (picks === 0) return { counts: { stitches }, uses: [soumak], work: { stitches } };
