@@ -1,7 +1,7 @@
 // Everything a lesson's text needs to be drawn besides its words: amounts in a person's own units, figures drawn with
 // her piece, addresses of media, what she has ticked. The page gathers it; drawing itself asks nobody.
 import type { Chapter, Cue } from '#contracts/media.ts';
-import type { Trust } from '#core/craft/amounts.ts';
+import type { Trust } from '#core/craft/trust.ts';
 import type { AmountPart } from '#core/units/format-amount.ts';
 
 export interface SceneAmount {

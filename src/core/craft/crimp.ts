@@ -24,6 +24,11 @@ function rootOrZero(square: number, scale: number): number | undefined {
   return square > -HAIR * scale ? 0 : undefined;
 }
 
+/** Length of the straight part between two arcs, L = √(p² + h² − 2Dh); undefined where the yarns jam. */
+export function straightPart(p: number, D: number, h: number): number | undefined {
+  return rootOrZero(p * p + h * h - 2 * D * h, D * D);
+}
+
 /**
  * Peirce's equations p = (l − Dθ)cos θ + D sin θ and h = (l − Dθ)sin θ + D(1 − cos θ),
  * solved without iteration: with the straight part L = l − Dθ they are the two halves of
@@ -32,7 +37,7 @@ function rootOrZero(square: number, scale: number): number | undefined {
  * Needs p > 0, D > 0 and 0 ≤ h ≤ D. Undefined where the yarns jam.
  */
 export function waveOf(p: number, D: number, h: number): Wave | undefined {
-  const straight = rootOrZero(p * p + h * h - 2 * D * h, D * D);
+  const straight = straightPart(p, D, h);
   if (straight === undefined) return undefined;
   const angleRad = Math.max(0, Math.atan2(D, straight) - Math.atan2(D - h, p));
   const lengthMm = straight + D * angleRad;

@@ -23,6 +23,10 @@ export interface PickGeometry {
   /** D/p */
   readonly tightness: number;
   readonly crimp: number;
+  /** Height of the weft's wave. */
+  readonly waveMm: number;
+  /** Steepest angle of the weft, radians. */
+  readonly angleRad: number;
   /** Weft from one working end to the next. */
   readonly stepMm: number;
   /** Weft round the end at a selvedge. */
@@ -72,6 +76,8 @@ export function pickGeometry(crossing: Crossing): PickGeometry | undefined {
     pickSpacingMm: crossing.pickSpacingMm,
     tightness: D / crossing.spacingMm,
     crimp: wave.crimp,
+    waveMm: chosen.heightMm,
+    angleRad: wave.angleRad,
     stepMm: wave.lengthMm,
     turnMm: turnLength(D, crossing.pickSpacingMm),
     clamped: chosen.clamped,

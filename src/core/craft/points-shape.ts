@@ -84,16 +84,26 @@ function joinRuns(edges: readonly number[]): EndRun[] {
   return runs;
 }
 
-/** True area by the even-odd rule, mm². Between two levels where sides begin, end or cross, widths change evenly. */
-export function areaOfPoints(points: readonly ShapePoint[]): number {
+/** Between two levels at which sides begin, end or cross: there, widths change evenly. */
+interface Strip {
+  /** Inside the shape at half height, by the even-odd rule. */
+  readonly insideMm: number;
+  readonly heightMm: number;
+}
+
+export function stripsOfPoints(points: readonly ShapePoint[]): readonly Strip[] {
   const levels = [...new Set([...points.map(({ yMm }) => yMm), ...crossingLevels(points)])].sort((a, b) => a - b);
-  return levels.reduce((area, level, index) => {
+  return levels.flatMap((level, index) => {
     const next = levels[index + 1];
-    if (next === undefined) return area;
+    if (next === undefined) return [];
     const edges = crossingsAt(points, (level + next) / 2);
-    const inside = edges.reduce((sum, x, at) => sum + (at % 2 === 0 ? -x : x), 0);
-    return area + inside * (next - level);
-  }, 0);
+    return [{ insideMm: edges.reduce((sum, x, at) => sum + (at % 2 === 0 ? -x : x), 0), heightMm: next - level }];
+  });
+}
+
+/** True area by the even-odd rule, mm². */
+export function areaOfPoints(points: readonly ShapePoint[]): number {
+  return stripsOfPoints(points).reduce((area, { insideMm, heightMm }) => area + insideMm * heightMm, 0);
 }
 
 /** Levels at which two sides cross each other. */

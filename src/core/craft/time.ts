@@ -20,15 +20,21 @@ export function secondsPerRow(workingEnds: number): number {
   return workingEnds * PACE.secondsPerEnd + PACE.secondsPerRow;
 }
 
+/** Hours for each kind of work. */
+export function hoursByWork(work: Work) {
+  return {
+    rows: (work.rows * secondsPerRow(work.workingEnds)) / 3600,
+    colourChanges: (work.colourChanges * PACE.secondsPerColourChange) / 3600,
+    knots: work.knots / PACE.ryaKnotsPerHour,
+    stitches: work.stitches / PACE.stitchesPerHour,
+    hemBundles: work.hemBundles / PACE.hemBundlesPerHour,
+    warping: work.warpEnds / PACE.warpEndsPerHour,
+    finishing: PACE.finishingHours,
+  };
+}
+
 export function hoursOf(work: Work): { readonly likely: number; readonly low: number; readonly high: number } {
-  const likely =
-    (work.rows * secondsPerRow(work.workingEnds)) / 3600 +
-    (work.colourChanges * PACE.secondsPerColourChange) / 3600 +
-    work.knots / PACE.ryaKnotsPerHour +
-    work.stitches / PACE.stitchesPerHour +
-    work.hemBundles / PACE.hemBundlesPerHour +
-    work.warpEnds / PACE.warpEndsPerHour +
-    PACE.finishingHours;
+  const likely = Object.values(hoursByWork(work)).reduce((sum, hours) => sum + hours, 0);
   return { likely, low: likely * PACE.lowFactor, high: likely * PACE.highFactor };
 }
 

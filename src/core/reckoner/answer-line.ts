@@ -1,5 +1,6 @@
 /** What the reckoner's page answers: lines of amounts, each with the way it was got. */
-import type { Input, Trust } from '#core/craft/amounts/amount-types.ts';
+import type { Input } from '#core/craft/amounts/amount-types.ts';
+import type { Trust } from '#core/craft/trust.ts';
 import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
 
 export interface AnswerLine {

@@ -1,7 +1,7 @@
 /** One yarn in every way of counting it. */
 import { reckon } from '#core/craft/reckon.ts';
 import type { YarnAnswer } from '#core/craft/reckoning/reckon-yarn.ts';
-import type { Trust } from '#core/craft/amounts/amount-types.ts';
+import type { Trust } from '#core/craft/trust.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import { classesByLength, classesByWraps } from '#core/craft/yarn/classes.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';

@@ -8,7 +8,9 @@ import { fieldId } from '#islands/ui/field-id.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 
 /** How sure an answer is, as short as a column needs it. */
-const TRUST_WORDS: Readonly<Record<AnswerLine['trust'], string>> = { measured: 'Measured', label: 'From the label', formula: 'Reckoned', class: 'From a table, roughly' };
+const TRUST_WORDS: Readonly<Record<AnswerLine['trust'], string>> = {
+  counted: 'Exact', measured: 'Measured', label: 'From the label', formula: 'Reckoned', class: 'From a table, roughly', practice: 'By custom, roughly',
+};
 
 function Value({ value, units }: { value: AnswerLine['value']; units: Units }) {
   return value.kind === 'words' ? value.words : <Parts parts={formatAmount(value, units)} />;

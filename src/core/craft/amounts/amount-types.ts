@@ -1,4 +1,5 @@
 /** What an amount is, and the way it was got. */
+import type { Trust } from '#core/craft/trust.ts';
 
 /**
  * How a length is shown. `size` and `fine` go to the nearest (centimetres or
@@ -20,12 +21,6 @@ export type Input =
   | { readonly kind: 'number'; readonly value: number; readonly unit?: string }
   | { readonly kind: 'share'; readonly share: number };
 
-/**
- * Where the least certain input came from, best first: measured by the person, read off
- * a label, computed, or taken from a table of classes.
- */
-export type Trust = 'measured' | 'label' | 'formula' | 'class';
-
 export interface HowReckoned {
   /** In words and signs, such as `rows × yarn of one row`. */
   readonly formula: string;
@@ -43,13 +38,6 @@ interface AmountFacts {
 }
 
 export type Amount = Quantity & AmountFacts;
-
-const TRUST_ORDER: readonly Trust[] = ['measured', 'label', 'formula', 'class'];
-
-/** A result is as certain as its least certain input. */
-export function leastTrust(first: Trust, ...more: readonly Trust[]): Trust {
-  return more.reduce((least, trust) => (TRUST_ORDER.indexOf(trust) > TRUST_ORDER.indexOf(least) ? trust : least), first);
-}
 
 export const lengthOf = (mm: number, use: LengthUse): Quantity & { kind: 'length' } => ({ kind: 'length', mm, use });
 export const massOf = (grams: number): Quantity & { kind: 'mass' } => ({ kind: 'mass', grams });

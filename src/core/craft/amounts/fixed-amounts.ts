@@ -3,16 +3,15 @@ import { holderStep } from '#core/craft/looms/looms.ts';
 import { HANGING } from '#core/craft/defaults.ts';
 import {
   countOf,
-  leastTrust,
   lengthOf,
   massOf,
   type HowReckoned,
   type Quantity,
-  type Trust,
 } from '#core/craft/amounts/amount-types.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
+import { leastTrust, type Trust } from '#core/craft/trust.ts';
 
 export interface Reckoned {
   readonly label: string;

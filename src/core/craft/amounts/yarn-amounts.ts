@@ -1,10 +1,11 @@
 /** Amounts of one weft yarn: length, mass, balls, and how far a filled shuttle goes. */
-import { countOf, leastTrust, lengthOf, massOf, type HowReckoned, type Trust } from '#core/craft/amounts/amount-types.ts';
+import { countOf, lengthOf, massOf, type HowReckoned } from '#core/craft/amounts/amount-types.ts';
 import { beatTrust, type PlannedPiece, type Reckoned } from '#core/craft/amounts/fixed-amounts.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import type { YarnPlan } from '#core/craft/plan-types.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
+import { leastTrust, type Trust } from '#core/craft/trust.ts';
 
 export interface PlannedYarn extends PlannedPiece {
   readonly role: string;

@@ -2,18 +2,21 @@
 import { SPACER_CARD_EXTRA_MM } from '#core/craft/defaults.ts';
 import { countWarp, countYarn } from '#core/craft/frame-loom/count-yarn.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
+import type { PieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
 import type { StackedBand } from '#core/craft/frame-loom/stack-bands.ts';
 import { cordLength, cordSpan, dowelLength, leastDowelDiameter } from '#core/craft/hanging.ts';
 import type { Dowel, Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
 import { pickLength } from '#core/craft/picks.ts';
-import type { BandPlan, CutPlan, Hours, LoomPlan, Plan, WeftPlan, YarnPlan } from '#core/craft/plan-types.ts';
+import type { BandPlan, CutPlan, LoomPlan, Plan, WeftPlan, YarnPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
 import { picksOn, type DressedLoom, type Woven } from '#core/craft/techniques/technique.ts';
 import { hoursOf, type Work } from '#core/craft/time.ts';
 
-export interface Workings {
+/** A piece that is sound and fits its loom, with all that adding up needs. */
+export interface PieceOnLoom {
+  readonly parts: PieceParts;
   readonly size: Piece['size'];
   readonly loom: Loom;
   readonly warp: Warp;
@@ -27,7 +30,7 @@ export interface Workings {
 }
 
 /** A band with what it takes. */
-interface WovenBand extends StackedBand {
+export interface WovenBand extends StackedBand {
   readonly woven: Woven;
 }
 
@@ -38,7 +41,7 @@ function planBand({ index, band, heightMm, woven }: WovenBand): BandPlan {
 }
 
 /** The yarn most picks are woven with; the one woven first where two are alike. */
-function mainWeft(bands: readonly WovenBand[], laid: DressedLoom): { readonly role: string; readonly rawPicks: number } {
+export function mainWeft(bands: readonly WovenBand[], laid: DressedLoom): { readonly role: string; readonly rawPicks: number } {
   const runs = bands.flatMap(({ woven }) => (woven.picks === undefined ? [] : [woven.picks]));
   const totals = [...laid.picks.keys()].map((role) => {
     const own = runs.filter((run) => run.role === role);
@@ -54,7 +57,7 @@ function planWeft(bands: readonly WovenBand[], laid: DressedLoom): WeftPlan {
   return { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm, pickMm, rawPicks };
 }
 
-function planCut({ size, hanging, dressed, height }: Workings, massG: number, findings: Findings): CutPlan {
+function planCut({ size, hanging, dressed, height }: PieceOnLoom, massG: number, findings: Findings): CutPlan {
   const spacerCard = { widthMm: dressed.ends.woundWidthMm + SPACER_CARD_EXTRA_MM, heightMm: height.bottomMm };
   const { dowel } = hanging;
   if (dowel === undefined) return { spacerCard };
@@ -70,9 +73,10 @@ function planCut({ size, hanging, dressed, height }: Workings, massG: number, fi
   return { spacerCard, dowel: { lengthMm, minDiameterMm }, cordMm: cordLength(spanMm) };
 }
 
-function planHours(bands: readonly WovenBand[], { dressed, laid }: Workings): Hours {
+/** What there is to do in all bands, and the warp. */
+export function workOf(bands: readonly WovenBand[], { dressed, laid }: PieceOnLoom): Work {
   const total = (of: keyof Work): number => bands.reduce((sum, { woven }) => sum + (woven.work[of] ?? 0), 0);
-  return hoursOf({
+  return {
     workingEnds: laid.workingEnds,
     warpEnds: dressed.ends.count,
     rows: total('rows'),
@@ -80,10 +84,10 @@ function planHours(bands: readonly WovenBand[], { dressed, laid }: Workings): Ho
     knots: total('knots'),
     stitches: total('stitches'),
     hemBundles: total('hemBundles'),
-  });
+  };
 }
 
-function planYarns(bands: readonly WovenBand[], { yarns, laid, settings }: Workings, findings: Findings): Record<string, YarnPlan> {
+function planYarns(bands: readonly WovenBand[], { yarns, laid, settings }: PieceOnLoom, findings: Findings): Record<string, YarnPlan> {
   const woven = bands.map((band) => band.woven);
   const plans: Record<string, YarnPlan> = {};
   for (const [role, yarn] of yarns) {
@@ -92,12 +96,16 @@ function planYarns(bands: readonly WovenBand[], { yarns, laid, settings }: Worki
   return plans;
 }
 
+export function weaveBands({ stacked, laid }: PieceOnLoom): readonly WovenBand[] {
+  return stacked.map((stack) => ({ ...stack, woven: techniqueOf(stack.band).weave(stack.band, stack.heightMm, laid) }));
+}
+
 /** Needs at least one yarn whose picks are laid, which laying the weft has seen to. */
-export function addUp(workings: Workings, findings: Findings): Omit<Plan, 'warnings'> {
-  const { dressed, laid, height, stacked } = workings;
-  const bands = stacked.map((stack) => ({ ...stack, woven: techniqueOf(stack.band).weave(stack.band, stack.heightMm, laid) }));
-  const warp = countWarp(workings.warp, workings.loom, dressed, workings.settings, findings);
-  const yarns = planYarns(bands, workings, findings);
+export function addUp(piece: PieceOnLoom, findings: Findings): Omit<Plan, 'warnings'> {
+  const { dressed, laid, height } = piece;
+  const bands = weaveBands(piece);
+  const warp = countWarp(piece.warp, piece.loom, dressed, piece.settings, findings);
+  const yarns = planYarns(bands, piece, findings);
   const massG = Object.values(yarns).reduce((sum, yarn) => sum + yarn.massG, warp.massG);
   return {
     ends: dressed.ends,
@@ -106,8 +114,8 @@ export function addUp(workings: Workings, findings: Findings): Omit<Plan, 'warni
     warp,
     yarns,
     bands: bands.map(planBand),
-    cut: planCut(workings, massG, findings),
+    cut: planCut(piece, massG, findings),
     massG,
-    hours: planHours(bands, workings),
+    hours: hoursOf(workOf(bands, piece)),
   };
 }

@@ -4,7 +4,7 @@
  * Each step runs as far as what it needs is sound, so that a person hears of everything
  * that is wrong at once.
  */
-import { addUp } from '#core/craft/frame-loom/add-up.ts';
+import { addUp, type PieceOnLoom } from '#core/craft/frame-loom/add-up.ts';
 import { dressWarp, fitHeight, type DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import { layWeft, threadsOf } from '#core/craft/frame-loom/lay-weft.ts';
 import { readPieceParts, type PieceParts } from '#core/craft/frame-loom/read-piece.ts';
@@ -47,8 +47,8 @@ export function settingsFrom({ allowances, mode, beat }: PieceParts): Settings |
   return allowances === undefined ? undefined : settingsOf(allowances, mode, beat ?? { picksPerWeftDiameter: 1 });
 }
 
-/** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */
-export function planFrameLoom(fields: Fields): Omit<Plan, 'warnings'> | undefined {
+/** Reads a piece, dresses its loom and lays and stacks its weft; undefined, with a problem among the findings, if it cannot be woven. */
+export function putOnLoom(fields: Fields): PieceOnLoom | undefined {
   const { findings } = fields;
   const parts = readPieceParts(fields);
   const { size, loom, warp, hanging } = parts;
@@ -61,5 +61,11 @@ export function planFrameLoom(fields: Fields): Omit<Plan, 'warnings'> | undefine
   const laid = dressed && layOn(dressed, parts, settings, used, findings);
   const stacked = laid && stackBands(parts.bands, size.heightMm, laid, findings);
   if (findings.count > 0 || !hanging || !height || !warp || !dressed || !laid || !stacked) return undefined;
-  return addUp({ size, loom, warp, hanging, yarns: parts.yarns, settings, height, dressed, laid, stacked }, findings);
+  return { parts, size, loom, warp, hanging, yarns: parts.yarns, settings, height, dressed, laid, stacked };
+}
+
+/** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */
+export function planFrameLoom(fields: Fields): Omit<Plan, 'warnings'> | undefined {
+  const piece = putOnLoom(fields);
+  return piece && addUp(piece, fields.findings);
 }

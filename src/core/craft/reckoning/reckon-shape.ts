@@ -1,8 +1,9 @@
 /** A shape in whole ends and rows. */
+import type { ShapeMeasures } from '#core/craft/piece.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { PICK_SPACING, SPACING, WORKING_ENDS } from '#core/craft/reckoning/rules.ts';
 import { runsOfPoints, type EndRun } from '#core/craft/points-shape.ts';
-import { rowsOfShape, stepShape, trueArea, widthKeyOf, widthOfShape } from '#core/craft/shapes.ts';
+import { rowsOfShape, stepShape, trueArea, widthKeyOf, widthOfShape, type ShapeGrid } from '#core/craft/shapes.ts';
 import { readMeasures } from '#core/craft/techniques/read-shape.ts';
 
 export interface ShapeAnswer {
@@ -27,9 +28,12 @@ function readAsDrawn(fields: Fields): false {
   return false;
 }
 
-export function reckonShape(fields: Fields): ShapeAnswer | undefined {
-  const { findings } = fields;
-  const read = findings.soundly(() => {
+export interface ShapeQuestion extends ShapeGrid {
+  readonly measures: ShapeMeasures;
+}
+
+export function readShapeQuestion(fields: Fields): ShapeQuestion | undefined {
+  const read = fields.findings.soundly(() => {
     const measures = readMeasures(fields);
     return {
       measures,
@@ -40,19 +44,26 @@ export function reckonShape(fields: Fields): ShapeAnswer | undefined {
     };
   });
   fields.end();
-  if (read === undefined) return undefined;
-  const { measures, ...grid } = read;
+  return read;
+}
+
+export function answerShape({ measures, ...grid }: ShapeQuestion, fields: Fields): ShapeAnswer | undefined {
   const rows = rowsOfShape(measures, grid.pickSpacingMm);
   if (rows > MOST_ROWS) {
     fields.reject('E_RANGE', 'pickSpacingMm', `That would be ${String(rows)} rows. Up to ${String(MOST_ROWS)} work.`);
     return undefined;
   }
   if (widthOfShape(measures) / grid.spacingMm > grid.ends + 0.5) {
-    fields.reject('E_FIT', widthKeyOf(measures), `The shape is wider than the cloth, which takes ${findings.length(grid.ends * grid.spacingMm)}.`);
+    fields.reject('E_FIT', widthKeyOf(measures), `The shape is wider than the cloth, which takes ${fields.findings.length(grid.ends * grid.spacingMm)}.`);
     return undefined;
   }
   const { widths } = stepShape(measures, grid);
   const endsTotal = widths.reduce((sum, width) => sum + width, 0);
   const areas = measures.shape === 'points' ? { areas: runsOfPoints(measures.points, { ...grid, rows, leftEnds: () => 0 }) } : {};
   return { rows, widths, ...areas, endsTotal, areaMm2: endsTotal * grid.spacingMm * grid.pickSpacingMm, trueAreaMm2: trueArea(measures) };
+}
+
+export function reckonShape(fields: Fields): ShapeAnswer | undefined {
+  const read = readShapeQuestion(fields);
+  return read && answerShape(read, fields);
 }

@@ -9,11 +9,12 @@ import {
   ryaCutLength,
   ryaKnotsPerRow,
   ryaWrap,
+  type RyaKnot,
   STRANDS_IN_KNOT,
   TRIM,
   windingCard,
 } from '#core/craft/techniques/rya.ts';
-import { readOverAndBack, soumakRatio, soumakRowLength, soumakStitch, soumakStitchesPerRow } from '#core/craft/techniques/soumak.ts';
+import { readOverAndBack, soumakRatio, soumakRowLength, soumakStitch, soumakStitchesPerRow, type SoumakStitch } from '#core/craft/techniques/soumak.ts';
 
 /** The row is with its shorter last stitch, if it has one, and without its two tails; the stitches are the whole ones. */
 export interface SoumakAnswer {
@@ -23,16 +24,22 @@ export interface SoumakAnswer {
   readonly rowMm: number;
 }
 
-export function reckonSoumak(fields: Fields): SoumakAnswer | undefined {
-  const { findings } = fields;
-  const read = findings.soundly(() => ({
+export interface SoumakQuestion extends SoumakStitch {
+  readonly ends: number;
+}
+
+export function readSoumak(fields: Fields): SoumakQuestion | undefined {
+  const read = fields.findings.soundly(() => ({
     ...readOverAndBack(fields),
     spacingMm: fields.number('spacingMm', SPACING),
     diameterSumMm: fields.number('diameterSumMm', fineLength('Warp and weft together')),
     ends: fields.number('ends', WORKING_ENDS),
   }));
   fields.end();
-  if (read === undefined) return undefined;
+  return read;
+}
+
+export function answerSoumak(read: SoumakQuestion, fields: Fields): SoumakAnswer | undefined {
   if (read.over > read.ends) {
     fields.reject('E_FIT', 'ends', `A stitch over ${String(read.over)} ends needs at least as many.`);
     return undefined;
@@ -40,6 +47,11 @@ export function reckonSoumak(fields: Fields): SoumakAnswer | undefined {
   const stitchMm = soumakStitch(read);
   const stitches = soumakStitchesPerRow(read.ends, read.over, read.back);
   return { stitchMm, ratio: soumakRatio(read), stitches, rowMm: soumakRowLength(read, read.ends) };
+}
+
+export function reckonSoumak(fields: Fields): SoumakAnswer | undefined {
+  const read = readSoumak(fields);
+  return read && answerSoumak(read, fields);
 }
 
 export interface RyaAnswer {
@@ -54,8 +66,15 @@ export interface RyaAnswer {
   readonly cardExactMm: number;
 }
 
-function readRya(fields: Fields) {
-  return {
+export interface RyaQuestion extends RyaKnot {
+  readonly ends: number;
+  readonly edgeEnds: number;
+  readonly rows: number;
+  readonly cardThicknessMm: number;
+}
+
+export function readRya(fields: Fields): RyaQuestion | undefined {
+  const read = fields.findings.soundly(() => ({
     legEnds: fields.number('legEnds', LEG_ENDS),
     strands: fields.number('strands', STRANDS_IN_KNOT),
     spacingMm: fields.number('spacingMm', SPACING),
@@ -67,14 +86,12 @@ function readRya(fields: Fields) {
     edgeEnds: fields.number('edgeEnds', { name: 'Plain ends at each edge', min: 0, max: 1000, whole: true }),
     rows: fields.number('rows', ROWS),
     cardThicknessMm: fields.number('cardThicknessMm', { name: 'Thickness of the card', min: 'over-zero', max: 100, unit: 'mm' }),
-  };
+  }));
+  fields.end();
+  return read;
 }
 
-export function reckonRya(fields: Fields): RyaAnswer | undefined {
-  const { findings } = fields;
-  const read = findings.soundly(() => readRya(fields));
-  fields.end();
-  if (read === undefined) return undefined;
+export function answerRya(read: RyaQuestion, fields: Fields): RyaAnswer | undefined {
   const knotsPerRow = ryaKnotsPerRow(read.ends, read.edgeEnds, read.legEnds);
   if (knotsPerRow < 1) {
     fields.reject('E_FIT', 'ends', `One knot needs ${String(2 * read.legEnds)} ends beside the plain ones at the edges.`);
@@ -97,4 +114,9 @@ export function reckonRya(fields: Fields): RyaAnswer | undefined {
     cardMm: card.widthMm,
     cardExactMm: card.exactMm,
   };
+}
+
+export function reckonRya(fields: Fields): RyaAnswer | undefined {
+  const read = readRya(fields);
+  return read && answerRya(read, fields);
 }

@@ -16,6 +16,9 @@ export interface TakeUpAnswer {
 }
 
 interface Cloth {
+  readonly d1: number;
+  readonly d2: number;
+  /** d₁ + d₂ */
   readonly D: number;
   readonly p1: number;
   readonly p2: number;
@@ -37,8 +40,12 @@ function givenWave(heightMm: number, { D, p1, p2 }: Cloth, range: WaveRange, fie
 }
 
 function readCloth(fields: Fields): Cloth {
+  const d1 = fields.number('warpDiameterMm', WARP_DIAMETER);
+  const d2 = fields.number('weftDiameterMm', fineLength('Thickness of the weft'));
   return {
-    D: fields.number('warpDiameterMm', WARP_DIAMETER) + fields.number('weftDiameterMm', fineLength('Thickness of the weft')),
+    d1,
+    d2,
+    D: d1 + d2,
     p1: fields.number('warpSpacingMm', SPACING),
     p2: fields.number('weftSpacingMm', PICK_SPACING),
   };
@@ -54,21 +61,45 @@ function weftWave(given: number | undefined, cloth: Cloth, range: WaveRange, mod
   return chosen?.heightMm;
 }
 
-export function reckonTakeUp(fields: Fields): TakeUpAnswer | undefined {
+export interface TakeUpQuestion {
+  readonly cloth: Cloth;
+  readonly weftWaveMm: number | undefined;
+  readonly mode: WeaveMode;
+}
+
+export function readTakeUp(fields: Fields): TakeUpQuestion | undefined {
   const { findings } = fields;
   const cloth = findings.soundly(() => readCloth(fields));
-  const given = fields.optionalNumber('weftWaveMm', { name: 'Height of the weft’s wave', min: 0, max: LONGEST_MM, unit: 'mm' });
+  const weftWaveMm = fields.optionalNumber('weftWaveMm', { name: 'Height of the weft’s wave', min: 0, max: LONGEST_MM, unit: 'mm' });
   const mode = fields.optionalChoice('mode', 'Mode', ['straight-warp', 'balanced']) ?? 'straight-warp';
   fields.end();
-  if (cloth === undefined || findings.count > 0) return undefined;
+  return cloth === undefined || findings.count > 0 ? undefined : { cloth, weftWaveMm, mode };
+}
+
+export interface TakeUp {
+  readonly range: WaveRange;
+  /** Of the weft's wave. */
+  readonly heightMm: number;
+  readonly weft: Wave;
+  readonly warp: Wave;
+}
+
+/** Both waves; undefined, with a problem among the findings, where the yarns jam or the given wave is refused. */
+export function bendBoth({ cloth, weftWaveMm, mode }: TakeUpQuestion, fields: Fields): TakeUp | undefined {
   const range = weftWaveRange(cloth.D, cloth.p1, cloth.p2);
-  const heightMm = range && weftWave(given, cloth, range, mode, fields);
+  const heightMm = range && weftWave(weftWaveMm, cloth, range, mode, fields);
   const weft = heightMm === undefined ? undefined : waveOf(cloth.p1, cloth.D, heightMm);
   const warp = heightMm === undefined ? undefined : waveOf(cloth.p2, cloth.D, cloth.D - heightMm);
-  if (findings.count > 0) return undefined;
-  if (range === undefined || weft === undefined || warp === undefined) {
+  if (fields.findings.count > 0) return undefined;
+  if (range === undefined || heightMm === undefined || weft === undefined || warp === undefined) {
     fields.reject('E_JAM', 'warpSpacingMm', 'Yarns this thick cannot lie so close. Set the ends further apart, or take thinner yarn.');
     return undefined;
   }
-  return { waveMm: range, weft, warp, warnings: findings.warnings };
+  return { range, heightMm, weft, warp };
+}
+
+export function reckonTakeUp(fields: Fields): TakeUpAnswer | undefined {
+  const question = readTakeUp(fields);
+  const bent = question && bendBoth(question, fields);
+  return bent && { waveMm: bent.range, weft: bent.weft, warp: bent.warp, warnings: fields.findings.warnings };
 }

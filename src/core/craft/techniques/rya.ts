@@ -40,7 +40,7 @@ export function ryaKnotsPerRow(ends: number, edgeEnds: number, legEnds: number):
 }
 
 /** Strands come in multiples of 5 mm on a card; wider is safe, narrower is not. */
-const CARD_STEP_MM = 5;
+export const CARD_STEP_MM = 5;
 
 /** A card that is wound and cut along one edge. Cut along both it is as wide as the strand is long. */
 export function windingCard(cutMm: number, thicknessMm: number): { readonly exactMm: number; readonly widthMm: number } {

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { AMOUNT_KEYS, amountKeysOf, amountOf, type Amount } from '#core/craft/amounts.ts';
-import { leastTrust } from '#core/craft/amounts/amount-types.ts';
+import { leastTrust } from '#core/craft/trust.ts';
 import type { Piece } from '#core/craft/piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { pieceWith, planOf, PLAIN_PIECE } from './a-piece.ts';

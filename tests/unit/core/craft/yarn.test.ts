@@ -74,13 +74,13 @@ describe('diameters', () => {
 
 describe('a thread', () => {
   test('takes its thickness from whatever the yarn says', () => {
-    expect(gristOf({ tex: 400 })).toEqual({ tex: 400, plies: 1 });
-    expect(gristOf({ metresPer100g: 250 })).toEqual({ tex: 400, plies: 1 });
-    expect(gristOf({ count: { text: '10', system: 'nm' } })).toEqual({ tex: 100, plies: 1 });
-    expect(gristOf({ count: { text: '10', system: 'nm' }, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1 });
-    expect(gristOf({ tex: 400, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 400, plies: 1 });
+    expect(gristOf({ tex: 400 })).toEqual({ tex: 400, plies: 1, trust: 'label' });
+    expect(gristOf({ metresPer100g: 250 })).toEqual({ tex: 400, plies: 1, trust: 'label' });
+    expect(gristOf({ count: { text: '10', system: 'nm' } })).toEqual({ tex: 100, plies: 1, trust: 'label' });
+    expect(gristOf({ count: { text: '10', system: 'nm' }, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1, trust: 'label' });
+    expect(gristOf({ tex: 400, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 400, plies: 1, trust: 'label' });
     expect(gristOf({ class: 3 }).tex).toBeCloseTo(444.444, 3);
-    expect(gristOf({ class: 3, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1 });
+    expect(gristOf({ class: 3, ball: { metres: 500, grams: 100 } })).toEqual({ tex: 200, plies: 1, trust: 'label' });
   });
 
   test('of a yarn that was never read is a programmer’s mistake', () => {
