@@ -14,14 +14,19 @@ export interface Claim {
   readonly attempts: number;
 }
 
+/** Jobs of some types only, or of all but some. */
+export type OfTypes = { readonly only: readonly string[] } | { readonly not: readonly string[] };
+
 /** Claims up to `limit` rows that are due, for `leaseSeconds`. Attempts rise here, so that a row that kills its worker still runs out of tries. */
-export async function claimDue(table: QueueTable, owner: string, limit: number, leaseSeconds: number): Promise<Claim[]> {
+export async function claimDue(table: QueueTable, owner: string, limit: number, leaseSeconds: number, types: OfTypes = { not: [] }): Promise<Claim[]> {
+  const named = 'only' in types ? types.only : types.not;
+  const ofTypes = named.length === 0 ? '' : `AND type ${'only' in types ? 'IN' : 'NOT IN'} (${named.map(() => '?').join(',')})`;
   return withTransaction(async () => {
     const due = await sequelize.query<Claim>(
       `SELECT id, attempts FROM ${table}
-        WHERE state = 'ready' AND run_at <= UTC_TIMESTAMP(3) AND (lease_until IS NULL OR lease_until < UTC_TIMESTAMP(3))
+        WHERE state = 'ready' AND run_at <= UTC_TIMESTAMP(3) AND (lease_until IS NULL OR lease_until < UTC_TIMESTAMP(3)) ${ofTypes}
         ORDER BY run_at, id LIMIT ${limit} FOR UPDATE SKIP LOCKED`,
-      { type: QueryTypes.SELECT },
+      { replacements: [...named], type: QueryTypes.SELECT },
     );
     if (due.length === 0) return [];
     await sequelize.query(
@@ -30,6 +35,15 @@ export async function claimDue(table: QueueTable, owner: string, limit: number, 
     );
     return due.map(({ id, attempts }) => ({ id, attempts: attempts + 1 }));
   });
+}
+
+/** Holds a row longer. @returns false when it is held by another by now: this one was too slow. */
+export async function renewLease(table: QueueTable, owner: string, id: number, leaseSeconds: number): Promise<boolean> {
+  const [, affected] = await sequelize.query(
+    `UPDATE ${table} SET lease_until = UTC_TIMESTAMP(3) + INTERVAL ? SECOND WHERE id = ? AND lease_owner = ? AND state = 'ready'`,
+    { replacements: [leaseSeconds, id, owner], type: QueryTypes.UPDATE },
+  );
+  return affected === 1;
 }
 
 async function finish(table: QueueTable, owner: string, id: number, set: string, values: unknown[]): Promise<boolean> {

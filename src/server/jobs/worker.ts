@@ -5,7 +5,7 @@ import { randomUUID } from 'node:crypto';
 import { systemClock, type Context } from '#server/context.ts';
 import type { RegisteredJob } from '#server/jobs/handlers/index.ts';
 import { releaseAll } from '#server/jobs/leases.ts';
-import { runDueJobs } from '#server/jobs/run-due.ts';
+import { runDueJobs, runLongJob } from '#server/jobs/run-due.ts';
 import { sendDueMails, type PostOffice } from '#server/mail/send-due.ts';
 import { services } from '#server/services.ts';
 
@@ -24,9 +24,29 @@ export function workerContext(): Context {
   return { actor: null, requestId: `worker-${randomUUID()}`, ip: '127.0.0.1', clock: systemClock, services: services() };
 }
 
-/** Works until `signal` aborts; then finishes what it holds and gives back the rest. */
+/** Works until `signal` aborts; then finishes the quick things it holds, drops the long one, and gives back the rest. */
 export async function work(options: WorkerOptions): Promise<void> {
   const owner = `${hostname().slice(0, 20).replace(/[^\x21-\x7e]/g, '')}-${process.pid}-${randomUUID().slice(0, 8)}`;
+  await Promise.all([quickLane(options, owner), longLane(options, owner)]);
+  await Promise.all([releaseAll('jobs', owner), releaseAll('mails', owner)]);
+}
+
+/** A film takes as long as it lasts; no letter waits for that. */
+async function longLane({ jobs, signal }: WorkerOptions, owner: string): Promise<void> {
+  while (!signal.aborted) {
+    const claimed = await runLongJob(workerContext(), owner, jobs, signal).catch((error: unknown) => tellTrouble(owner, error, signal));
+    if (claimed === 0) await pause(IDLE_MS, undefined, { signal }).catch(() => undefined);
+  }
+}
+
+/** The database may be starting again; nothing that was claimed is lost, its lease runs out. */
+async function tellTrouble(owner: string, error: unknown, signal: AbortSignal): Promise<number> {
+  console.error(JSON.stringify({ level: 'error', worker: owner, message: error instanceof Error ? error.message : String(error) }));
+  await pause(TROUBLE_MS, undefined, { signal }).catch(() => undefined);
+  return 0;
+}
+
+async function quickLane(options: WorkerOptions, owner: string): Promise<void> {
   const due = options.chores.map((chore) => ({ chore, at: 0 }));
   while (!options.signal.aborted) {
     let claimed = 0;
@@ -39,11 +59,8 @@ export async function work(options: WorkerOptions): Promise<void> {
         await entry.chore.run(workerContext());
       }
     } catch (error) {
-      // The database may be starting again; nothing that was claimed is lost, its lease runs out.
-      console.error(JSON.stringify({ level: 'error', worker: owner, message: error instanceof Error ? error.message : String(error) }));
-      await pause(TROUBLE_MS, undefined, { signal: options.signal }).catch(() => undefined);
+      await tellTrouble(owner, error, options.signal);
     }
     if (claimed === 0) await pause(IDLE_MS, undefined, { signal: options.signal }).catch(() => undefined);
   }
-  await Promise.all([releaseAll('jobs', owner), releaseAll('mails', owner)]);
 }

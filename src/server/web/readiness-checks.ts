@@ -6,6 +6,7 @@ import { statfs } from 'node:fs/promises';
 import * as mariadb from 'mariadb';
 import type { Config } from '#server/config.ts';
 import { migrations } from '#server/db/migrations/index.ts';
+import { processVideo } from '#server/jobs/definitions/videos.ts';
 import type { ReadinessCheck } from '#server/web/front/readiness.ts';
 
 const LEAST_FREE_BYTES = 200_000_000;
@@ -43,7 +44,8 @@ async function schemaFault(ask: Ask): Promise<string | undefined> {
 }
 
 async function queueFault(ask: Ask): Promise<string | undefined> {
-  const [row] = await ask("SELECT TIMESTAMPDIFF(SECOND, MIN(run_at), UTC_TIMESTAMP(3)) AS late FROM jobs WHERE state = 'ready' AND lease_until IS NULL");
+  // Films wait for each other as long as they last; that is no sign of a worker gone.
+  const [row] = await ask(`SELECT TIMESTAMPDIFF(SECOND, MIN(run_at), UTC_TIMESTAMP(3)) AS late FROM jobs WHERE state = 'ready' AND lease_until IS NULL AND type <> '${processVideo.type}'`);
   return Number(row?.['late'] ?? 0) > LONGEST_QUEUE_SECONDS ? 'is not being worked on' : undefined;
 }
 

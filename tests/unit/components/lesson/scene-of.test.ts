@@ -1,6 +1,6 @@
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { clockTime } from '#components/lesson/clock-time.ts';
+import { clockTime } from '#core/captions/clock-time.ts';
 import { stepInHand } from '#components/lesson/scene.ts';
 import { sceneOf, type SceneSources } from '#components/lesson/scene-of.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
