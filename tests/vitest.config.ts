@@ -20,6 +20,13 @@ const withoutDatabase = 'tests/server/{payments,stand-ins,mail,lesson-text,web/f
 export default defineConfig({
   root,
   test: {
+    /** `npm run coverage`: of the craft, in which every branch is a number somebody weaves by. */
+    coverage: {
+      provider: 'v8',
+      include: ['src/core/craft/**/*.ts'],
+      reporter: [['text', { skipFull: true }]],
+      thresholds: { branches: 95 },
+    },
     projects: [
       { test: { name: 'unit', ...shared, include: ['tests/unit/**/*.test.ts', 'tests/reference/**/*.test.ts'], environment: 'node' } },
       { test: { name: 'islands', ...shared, include: ['tests/islands/**/*.test.{ts,tsx}'], environment: 'jsdom', setupFiles: ['tests/support/islands-setup.ts'] } },

@@ -5,6 +5,7 @@ import type { ShapePoint } from '#core/craft/piece.ts';
 import { areaOfPoints, boxOfPoints, runsOfPoints } from '#core/craft/points-shape.ts';
 import { rowsOfShape, stepShape } from '#core/craft/shapes.ts';
 import { placeShape } from '#core/craft/techniques/colour-rows.ts';
+import { cases } from '../support/random-cases.ts';
 import { expectClose } from './close.ts';
 
 /** Area of a line that does not cross itself, from its corners (Meister 1769; schoolbook). */
@@ -48,7 +49,7 @@ describe('the true area of a shape drawn by points', () => {
     fc.assert(fc.property(stars, (points) => {
       const area = shoelace(points);
       return Math.abs(areaOfPoints(points) - area) <= 1e-9 * area + 1e-9;
-    }), { numRuns: 500 });
+    }), { numRuns: cases(500) });
   });
 
   test('counts a bow tie’s two wings, whose signed areas cancel in the shoelace', () => {
@@ -81,7 +82,7 @@ describe('the ends of a shape drawn by points', () => {
           expect(woven, `row ${String(row)} end ${String(end)}`).toBe(isInside(points, box.leftMm + (end + 0.5) * spacingMm, y));
         }
       }
-    }), { numRuns: 150 });
+    }), { numRuns: cases(150) });
   });
 
   test('come to the true area within half an end for every edge they meet', () => {
@@ -91,7 +92,7 @@ describe('the ends of a shape drawn by points', () => {
       const stepped = runs.flat().reduce((sum, { ends }) => sum + ends, 0) * spacingMm * pickSpacingMm;
       const edges = points.length * rows;
       return Math.abs(stepped - shoelace(points)) <= edges * 0.5 * spacingMm * pickSpacingMm + boxOfPoints(points).widthMm * pickSpacingMm * 2;
-    }), { numRuns: 300 });
+    }), { numRuns: cases(300) });
   });
 
   test('a finer and finer grid comes to the true area (0.2 % at 0.5 by 0.25 mm)', () => {
@@ -114,7 +115,7 @@ describe('the ends of a shape drawn by points', () => {
         const from = b[row]?.[0];
         if (seam !== undefined && from !== undefined) expect(seam.start + seam.ends).toBe(from.start);
       }
-    }), { numRuns: 200 });
+    }), { numRuns: cases(200) });
   });
 
   test('an edge just half-way between two ends goes up, whatever the last bit of the division says', () => {

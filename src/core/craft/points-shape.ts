@@ -25,8 +25,17 @@ export function boxOfPoints(points: readonly ShapePoint[]): PointsBox {
   return { leftMm, bottomMm, widthMm: Math.max(...xs) - leftMm, heightMm: Math.max(...ys) - bottomMm };
 }
 
+type Side = readonly [ShapePoint, ShapePoint];
+
+const upwards = ([a, b]: Side): Side => (a.yMm <= b.yMm ? [a, b] : [b, a]);
+
+/** Where the side from `low` to `high` meets a level between them. */
+function crossingAt(low: ShapePoint, high: ShapePoint, yMm: number): number {
+  return low.xMm + ((yMm - low.yMm) / (high.yMm - low.yMm)) * (high.xMm - low.xMm);
+}
+
 /** Sides from corner to corner, the last one back to the first. */
-function sidesOf(points: readonly ShapePoint[]): (readonly [ShapePoint, ShapePoint])[] {
+function sidesOf(points: readonly ShapePoint[]): Side[] {
   return points.flatMap((from, index) => {
     const to = points[(index + 1) % points.length];
     return to === undefined ? [] : [[from, to] as const];
@@ -38,10 +47,9 @@ function sidesOf(points: readonly ShapePoint[]): (readonly [ShapePoint, ShapePoi
  * lower corner up to, not including, its upper one, so that a corner is never met twice.
  */
 export function crossingsAt(points: readonly ShapePoint[], yMm: number): number[] {
-  const found = sidesOf(points).flatMap(([a, b]) => {
-    const [low, high] = a.yMm <= b.yMm ? [a, b] : [b, a];
-    if (yMm < low.yMm || yMm >= high.yMm) return [];
-    return [low.xMm + ((yMm - low.yMm) / (high.yMm - low.yMm)) * (high.xMm - low.xMm)];
+  const found = sidesOf(points).flatMap((side) => {
+    const [low, high] = upwards(side);
+    return yMm < low.yMm || yMm >= high.yMm ? [] : [crossingAt(low, high, yMm)];
   });
   return found.sort((a, b) => a - b);
 }
@@ -63,12 +71,23 @@ export interface PointsGrid {
 /** The areas of every row, left to right; a row may have none. Areas that touch are one. */
 export function runsOfPoints(points: readonly ShapePoint[], grid: PointsGrid): EndRun[][] {
   const box = boxOfPoints(points);
-  return Array.from({ length: grid.rows }, (_, row) => {
-    const level = (row + 0.5) * grid.pickSpacingMm;
-    const left = grid.leftEnds(level / box.heightMm);
-    const edges = crossingsAt(points, box.bottomMm + level).map((xMm) => roundHalfUp(left + (xMm - box.leftMm) / grid.spacingMm));
-    return joinRuns(edges);
-  });
+  /** The first row whose level is not below this height. */
+  const rowFrom = (yMm: number): number => Math.max(0, Math.ceil((yMm - box.bottomMm) / grid.pickSpacingMm - 0.5));
+  const crossed = Array.from({ length: grid.rows }, (): number[] => []);
+  for (const side of sidesOf(points)) {
+    const [low, high] = upwards(side);
+    const end = Math.min(grid.rows, rowFrom(high.yMm));
+    for (let row = rowFrom(low.yMm); row < end; row += 1) {
+      const level = (row + 0.5) * grid.pickSpacingMm;
+      crossed[row]?.push(grid.leftEnds(level / box.heightMm) + (crossingAt(low, high, box.bottomMm + level) - box.leftMm) / grid.spacingMm);
+    }
+  }
+  return crossed.map((ends) => joinRuns(ends.sort((a, b) => a - b).map(roundHalfUp)));
+}
+
+/** How far its sides go up and down in all, over two: the height of a shape that every level meets twice, more of a jagged one. */
+export function climbOfPoints(points: readonly ShapePoint[]): number {
+  return sidesOf(points).reduce((sum, [a, b]) => sum + Math.abs(b.yMm - a.yMm), 0) / 2;
 }
 
 function joinRuns(edges: readonly number[]): EndRun[] {

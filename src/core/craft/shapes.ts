@@ -69,7 +69,8 @@ export function stepShape(measures: ShapeMeasures, grid: ShapeGrid): SteppedShap
     const areas = runsOfPoints(measures.points, { ...grid, rows, leftEnds: () => 0 });
     return { rows, widths: areas.map((runs) => runs.reduce((sum, { ends }) => sum + ends, 0)) };
   }
-  const widths = Array.from({ length: rows }, (_, index) => wholeWidth(idealWidth(measures, grid, index + 1, rows), grid));
+  const widths: number[] = [];
+  for (let row = 1; row <= rows; row += 1) widths.push(wholeWidth(idealWidth(measures, grid, row, rows), grid));
   return { rows, widths };
 }
 

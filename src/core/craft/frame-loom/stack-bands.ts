@@ -13,6 +13,9 @@ export interface StackedBand {
 /** Heights measured by hand agree no closer. */
 const CLOSE_ENOUGH_MM = 0.5;
 
+/** Rows of all shapes together: a tapestry three metres high, of ten rows to the centimetre, with ten shapes across all of it. */
+const MOST_SHAPE_ROWS = 30_000;
+
 const pathOf = (index: number): string => below('/bands', index);
 
 export function rolesOf(band: Band): readonly NamedRole[] {
@@ -85,9 +88,18 @@ function heightsOf(bands: readonly Band[], pieceHeightMm: number, loom: DressedL
   return own.map((height, index) => (height !== 'fill' ? height : index === filling ? Math.max(0, restMm) : 0));
 }
 
+/** Whether all shapes together can be stepped out in a moment; what is larger was most likely mistyped. */
+function canBeSteppedOut(bands: readonly Band[], loom: DressedLoom, findings: Findings): boolean {
+  const rows = bands.reduce((sum, band) => sum + (techniqueOf(band).shapeRows?.(band, loom) ?? 0), 0);
+  if (rows <= MOST_SHAPE_ROWS) return true;
+  findings.reject('E_RANGE', '/bands', `The shapes come to ${String(rows)} rows, and up to ${String(MOST_SHAPE_ROWS)} work. Check the heights, the yarns and the beat.`);
+  return false;
+}
+
 /** Checks every band that can be checked; answers them all with their heights if they fit together. */
 export function stackBands(bands: readonly (Band | undefined)[], pieceHeightMm: number | undefined, loom: DressedLoom, findings: Findings): readonly StackedBand[] | undefined {
   const ready = bands.filter((band): band is Band => band !== undefined && isReady(band, loom));
+  if (!canBeSteppedOut(ready, loom, findings)) return undefined;
   const whole = ready.length === bands.length && pieceHeightMm !== undefined;
   const heights = whole ? heightsOf(ready, pieceHeightMm, loom, findings) : undefined;
   const stacked: StackedBand[] = [];

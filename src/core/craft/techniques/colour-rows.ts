@@ -1,5 +1,5 @@
 /** Which colour lies where in the rows of a tabby band that has shapes in it. */
-import type { ColourArea } from '#core/craft/colour-areas.ts';
+import type { ColourArea, Edge } from '#core/craft/colour-areas.ts';
 import type { Shape, ShapeJoin } from '#core/craft/piece.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 import { runsOfPoints, type EndRun } from '#core/craft/points-shape.ts';
@@ -58,34 +58,33 @@ function pointRows(shape: Shape & { readonly shape: 'points' }, grid: BandGrid):
   const left = centreInEnds(shape, grid) - widthOfShape(shape) / grid.spacingMm / 2;
   const lean = leanInEnds(shape, grid);
   const rows = runsOfPoints(shape.points, { ...grid, rows: rowsOfShape(shape, grid.pickSpacingMm), leftEnds: (share) => left + lean * share });
-  return rows.map((runs) =>
-    runs.flatMap(({ start, ends }) => {
-      const [from, to] = [Math.max(0, start), Math.min(grid.ends, start + ends)];
-      return to > from ? [{ start: from, ends: to - from }] : [];
-    }),
-  );
+  return rows.map((runs) => runs.map((run) => within(run, grid.ends)).filter(({ ends }) => ends > 0));
 }
 
-/** A stretch of a row in one yarn; `layer` 0 is the ground, later shapes lie over earlier ones. */
-interface Stretch {
-  readonly start: number;
-  readonly end: number;
-  readonly yarn: string;
+function within(run: EndRun, ends: number): EndRun {
+  const start = Math.max(0, run.start);
+  return { start, ends: Math.min(ends, run.start + run.ends) - start };
+}
+
+/** Ends of a row that one shape shows; `layer` counts the shapes from 1, and 0 is the ground. */
+interface Run {
   readonly layer: number;
-  readonly join: ShapeJoin;
+  ends: number;
 }
 
-function layOver(stretches: readonly Stretch[], top: Stretch): Stretch[] {
-  const beside = stretches.flatMap((under) => [
-    { ...under, end: Math.min(under.end, top.start) },
-    { ...under, start: Math.max(under.start, top.end) },
-  ]);
-  return [...beside.filter(({ start, end }) => end > start), top].sort((a, b) => a.start - b.start);
-}
-
-/** Neighbours meet as the upper one of them asks. */
-function joinOf(a: Stretch, b: Stretch): ShapeJoin {
-  return a.layer > b.layer ? a.join : b.join;
+/** The row as it is seen: a later shape lies over an earlier one. */
+function runsOfRow(row: number, shapes: readonly PlacedShape[], ends: number): readonly Run[] {
+  const layerAtEnd = new Array<number>(ends).fill(0);
+  shapes.forEach(({ firstRow, rows }, index) => {
+    for (const area of rows[row - firstRow] ?? []) layerAtEnd.fill(index + 1, area.start, area.start + area.ends);
+  });
+  const runs: Run[] = [];
+  let run: Run | undefined;
+  for (const layer of layerAtEnd) {
+    if (run?.layer === layer) run.ends += 1;
+    else runs.push((run = { layer, ends: 1 }));
+  }
+  return runs;
 }
 
 export interface YarnArea extends ColourArea {
@@ -94,33 +93,36 @@ export interface YarnArea extends ColourArea {
 
 /** The colour areas of one row (from 0), left to right. */
 export function areasOfRow(row: number, ground: string, shapes: readonly PlacedShape[], ends: number): readonly YarnArea[] {
-  const bare: Stretch = { start: 0, end: ends, yarn: ground, layer: 0, join: 'slit' };
-  const stretches = shapes.reduce<readonly Stretch[]>(
-    (laid, { yarn, join, firstRow, rows }, index) =>
-      (rows[row - firstRow] ?? []).reduce<readonly Stretch[]>((under, { start, ends: wide }) => layOver(under, { start, end: start + wide, yarn, layer: index + 1, join }), laid),
-    [bare],
-  );
-  return stretches.map((stretch, index) => {
-    const before = stretches[index - 1];
-    const after = stretches[index + 1];
-    return {
-      yarn: stretch.yarn,
-      ends: stretch.end - stretch.start,
-      left: before === undefined ? 'selvedge' : joinOf(before, stretch),
-      right: after === undefined ? 'selvedge' : joinOf(stretch, after),
-    };
-  });
+  const runs = runsOfRow(row, shapes, ends);
+  const shapeAt = (layer: number): PlacedShape | undefined => shapes[layer - 1];
+  /** Neighbours meet as the upper one of them asks. */
+  const edge = (run: Run, beside: Run | undefined): Edge =>
+    beside === undefined ? 'selvedge' : shapeAt(Math.max(run.layer, beside.layer))?.join ?? 'slit';
+  return runs.map((run, index) => ({
+    yarn: shapeAt(run.layer)?.yarn ?? ground,
+    ends: run.ends,
+    left: edge(run, runs[index - 1]),
+    right: edge(run, runs[index + 1]),
+  }));
 }
 
 /** The most rows in which a slit beside the shape stays between the same two ends. A selvedge is no slit. */
 export function longestSlitRows({ rows }: Pick<PlacedShape, 'rows'>, ends: number): number {
   let longest = 0;
-  let before: ReadonlyMap<number, number> = new Map();
-  for (const runs of rows) {
-    const gaps = runs.flatMap(({ start, ends: wide }) => [start, start + wide]).filter((gap) => gap > 0 && gap < ends);
-    const now = new Map(gaps.map((gap) => [gap, (before.get(gap) ?? 0) + 1]));
-    longest = Math.max(longest, ...now.values());
-    before = now;
-  }
+  /** By the gap between two ends: the first and the last row so far of the slit that lies there. */
+  const first: number[] = [];
+  const last: number[] = [];
+  const cut = (gap: number, row: number): void => {
+    if (gap === 0 || gap === ends) return;
+    if (last[gap] !== row - 1) first[gap] = row;
+    last[gap] = row;
+    longest = Math.max(longest, row - (first[gap] ?? row) + 1);
+  };
+  rows.forEach((areas, row) => {
+    for (const area of areas) {
+      cut(area.start, row);
+      cut(area.start + area.ends, row);
+    }
+  });
   return longest;
 }

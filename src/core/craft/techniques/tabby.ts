@@ -2,11 +2,11 @@
 import { areaLength } from '#core/craft/colour-areas.ts';
 import { LONGEST_SLIT_MM } from '#core/craft/defaults.ts';
 import type { BandHeight, Shape, TabbyBand } from '#core/craft/piece.ts';
-import { boxOfPoints } from '#core/craft/points-shape.ts';
+import { boxOfPoints, climbOfPoints } from '#core/craft/points-shape.ts';
 import { picksInHeight, pickLength } from '#core/craft/picks.ts';
 import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
 import { below } from '#core/craft/reading/findings.ts';
-import { heightKeyOf, heightOfShape, widthKeyOf, widthOfShape } from '#core/craft/shapes.ts';
+import { heightKeyOf, heightOfShape, rowsOfShape, widthKeyOf, widthOfShape } from '#core/craft/shapes.ts';
 import {
   areasOfRow,
   centreInEnds,
@@ -123,6 +123,11 @@ function check(band: TabbyBand, heightMm: number, loom: DressedLoom, report: Ban
   });
 }
 
+function shapeRows(band: TabbyBand, loom: DressedLoom): number {
+  const { pickSpacingMm } = picksOn(loom, band.yarn);
+  return (band.shapes ?? []).reduce((sum, shape) => sum + (shape.shape === 'points' ? picksInHeight(climbOfPoints(shape.points), pickSpacingMm) : rowsOfShape(shape, pickSpacingMm)), 0);
+}
+
 /** The rows that shapes may stand in; all others are the ground from edge to edge. */
 function rowsWithShapes(shapes: readonly PlacedShape[], rows: number): { readonly first: number; readonly end: number } {
   const first = Math.min(rows, ...shapes.map(({ firstRow }) => firstRow));
@@ -166,6 +171,7 @@ export const tabby: Technique<'tabby'> = {
     ...(band.shapes ?? []).map((shape, index) => ({ key: `shapes/${String(index)}/yarn`, role: shape.yarn, inPicks: true })),
   ],
   height: (band) => (band.fill === true ? 'fill' : band.heightMm),
+  shapeRows,
   check,
   weave,
 };

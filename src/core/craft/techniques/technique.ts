@@ -87,6 +87,8 @@ export interface Technique<N extends TechniqueName> {
   read(fields: Fields): BandByTechnique[N];
   roles(band: BandByTechnique[N]): readonly NamedRole[];
   height(band: BandByTechnique[N], loom: DressedLoom): number | 'fill';
+  /** Rows in which its shapes are stepped out, which is what reckoning a large piece takes its time for. */
+  shapeRows?(band: BandByTechnique[N], loom: DressedLoom): number;
   check(band: BandByTechnique[N], heightMm: number, loom: DressedLoom, report: BandReport): void;
   weave(band: BandByTechnique[N], heightMm: number, loom: DressedLoom): Woven;
 }

@@ -1,6 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { reckon, type Answers, type Question } from '#core/craft/reckon.ts';
+import { cases } from '../../../support/random-cases.ts';
 import { PLAIN_PIECE } from './a-piece.ts';
 
 type Asked = Readonly<Record<string, unknown>>;
@@ -156,7 +157,7 @@ describe('take-up', () => {
         const { weft, warp } = outcome.value as Answers['take-up'];
         return weft.crimp >= -1e-9 && warp.crimp >= -1e-9;
       }),
-      { numRuns: 1500, seed: 17 },
+      { numRuns: cases(1500), seed: 17 },
     );
   });
 });
@@ -192,6 +193,6 @@ test('no change of one value in a sound question makes it throw, and it is refus
       fc.pre(key !== 'what');
       return refusals(but(question, key, value)).length <= 1;
     }),
-    { numRuns: 3000, seed: 23 },
+    { numRuns: cases(3000), seed: 23 },
   );
 });

@@ -3,6 +3,7 @@ import { describe, expect, it } from 'vitest';
 import { shade } from '#core/craft/cloth/colour.ts';
 import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { CORDS, RYA, SOUMAK, WEDGES, wovenPiece } from './pieces.ts';
 
 const VIEWS: readonly ClothView[] = [
@@ -171,7 +172,7 @@ describe('any piece a person may describe', () => {
           expect(svg.length).toBeLessThan(60 * 1024);
         }
       }),
-      { numRuns: 60 },
+      { numRuns: cases(60) },
     );
   });
 });

@@ -4,6 +4,7 @@ import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
 import { tellRoom } from '#core/craft/fitting/tell-room.ts';
 import { isWorthChoosing, wayIdOf, waysToFit, type WayId, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import type { Band, Piece } from '#core/craft/piece.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { PLAIN_PIECE, pieceWith, planOf } from '../a-piece.ts';
 
 const plain = (words: string): string => words.replaceAll('\u00a0', ' ');
@@ -182,7 +183,7 @@ test('a kept way that is none is refused with its place', () => {
 });
 
 describe('whatever the loom is', () => {
-  const RUNS = { numRuns: 1000, seed: 20260901 };
+  const RUNS = { numRuns: cases(1000), seed: 20260901 };
   const looms = fc.record({
     insideWidthMm: fc.double({ min: 60, max: 900, noNaN: true }),
     insideHeightMm: fc.double({ min: 80, max: 1200, noNaN: true }),

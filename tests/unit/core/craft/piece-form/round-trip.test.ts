@@ -8,6 +8,7 @@ import { shiftPoint } from '#core/craft/piece-form/field-text.ts';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { typePiece } from '#core/craft/piece-form/type-piece.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { arbitraryPiece } from './arbitrary-piece.ts';
 
 const SHIPPED = ['../../../../../content/series/low-tide/piece.json', '../../../../reference/worked-piece.json'];
@@ -25,13 +26,13 @@ describe('a piece in a form', () => {
       const { piece: read, faults } = readTyped(typePiece(piece, units));
       expect([...faults]).toEqual([]);
       expect(read).toEqual(piece);
-    }), { numRuns: 120 });
+    }), { numRuns: cases(120) });
   });
 
   test.each(['cm', 'in'] as const)('comes back the same after a browser has sent it, in %s', (units) => {
     fc.assert(fc.property(arbitraryPiece, (piece) => {
       expect(readTyped(sent(piece, units)).piece).toEqual(piece);
-    }), { numRuns: 60 });
+    }), { numRuns: cases(60) });
   });
 
   test.each(SHIPPED.flatMap((path) => [[path, 'cm'], [path, 'in']] as const))('keeps the plan of %s in %s', (path, units) => {

@@ -1,0 +1,28 @@
+// @ts-check
+/**
+ * Bundles the tests of the craft, each beside its source as `.test.mjs`, and what they share in chunks, with `collect.ts`
+ * in Vitest's place. The mutation run calls it in its own copy of the tree, in which the sources carry every change.
+ */
+import { readdirSync } from 'node:fs';
+import { build } from 'esbuild';
+
+/** It draws threads tight in small steps, which takes as long as all other tests together. */
+const TOO_SLOW = 'reference/thread-length.test.ts';
+
+const tests = readdirSync('tests', { recursive: true, encoding: 'utf8' })
+  .filter((file) => /^(?:reference|unit\/core\/craft)\/.*\.test\.ts$/u.test(file) && file !== TOO_SLOW);
+
+await build({
+  entryPoints: ['mutation/collect.ts', ...tests].map((file) => `tests/${file}`),
+  outdir: '.',
+  outbase: '.',
+  outExtension: { '.js': '.mjs' },
+  chunkNames: 'tests/mutation/chunks/[hash]',
+  alias: { vitest: './tests/mutation/collect.ts' },
+  bundle: true,
+  splitting: true,
+  format: 'esm',
+  platform: 'node',
+  target: 'node20',
+  external: ['mathjs'],
+});
