@@ -9,6 +9,7 @@ import { WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import { waysOf } from '#core/craft/my-piece/judge-mine.ts';
 import { leaveOutNames, wayOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Piece } from '#core/craft/piece.ts';
+import type { Problem } from '#core/outcome.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { likelyHours } from '#core/series/hours-words.ts';
 import { amountText } from '#core/units/format-amount.ts';
@@ -58,12 +59,29 @@ export function WayFields({ typed, chosen, pattern, asPattern, name, faults, cha
         {own?.ok === true ? room.map((says) => <p key={says}>{says}</p>) : <p>As the pattern has it, {name} does not go on this loom. Choose what may change.</p>}
       </div>
       <div className="ways-list lined">
-        {ways.map((way) => <WayRow key={way.id} {...{ way, name }} units={typed.units} isChecked={way.id === checked} onChoose={() => change({ kind: 'type', key: WAY_KEY, text: way.id })} />)}
+        {inOrder(ways).map((way) => <WayRow key={way.id} {...{ way, name }} units={typed.units} isChecked={way.id === checked} onChoose={() => change({ kind: 'type', key: WAY_KEY, text: way.id })} />)}
       </div>
       {ways.some(({ id }) => id === 'leave-chosen') && <BandTicks {...{ chosen, pattern, change }} />}
       {fault !== undefined && <Wrong id="ways-wrong" says={fault} />}
     </fieldset>
   );
+}
+
+/** The pattern as it is, then what can be woven, then what cannot. */
+function inOrder([asItIs, ...others]: readonly WayToFit[]): readonly WayToFit[] {
+  const isOpen = ({ id, outcome }: WayToFit): boolean => outcome.ok || id === 'leave-chosen';
+  return [...(asItIs === undefined ? [] : [asItIs]), ...others.filter(isOpen), ...others.filter((way) => !isOpen(way))];
+}
+
+const isLoomsSize = ({ code, path }: Problem): boolean => code === 'E_FIT' && path.startsWith('/loom');
+
+/** Why a way does not do. What the fields above say already is not said again. */
+function whyNot({ id, outcome }: WayToFit): string {
+  if (outcome.ok) return '';
+  if (id === 'as-it-is' && outcome.problems.every(isLoomsSize)) return 'Does not go on this loom.';
+  if ((id === 'doubled' || id === 'fewer-nails') && outcome.problems.every(isLoomsSize)) return 'Does not fit: ends further apart make the piece no smaller.';
+  const reasons = [...new Set(outcome.problems.map(({ message }) => message))].join(' ');
+  return id === 'leave-chosen' ? reasons : `Does not fit. ${reasons}`;
 }
 
 interface WayRowProps {
@@ -74,8 +92,8 @@ interface WayRowProps {
   onChoose: () => void;
 }
 
-function WayRow({ way: { id, way, outcome }, name, units, isChecked, onChoose }: WayRowProps) {
-  const made = outcome.ok ? outcome.value : null;
+function WayRow({ way: found, name, units, isChecked, onChoose }: WayRowProps) {
+  const { id, way, outcome } = found;
   const { title, means } = WORDS[id];
   const isLarger = way?.kind === 'scaled' && way.factor > 1;
   // What cannot be woven can still be chosen where it must be filled in first, or stands already.
@@ -83,14 +101,14 @@ function WayRow({ way: { id, way, outcome }, name, units, isChecked, onChoose }:
   return (
     <label className="way">
       <input className="radio" type="radio" name={WAY_KEY} value={id} checked={isChecked} disabled={isOff} onChange={onChoose} aria-describedby={`way-${id}`} />
-      <span className="way-picture" aria-hidden="true">{made !== null && <SmallCloth made={made} id={id} name={name} />}</span>
       <span className="way-words">
         <b>{isLarger ? 'All of it larger' : title}</b>
         <span className="small" id={`way-${id}`}>
-          <span className="quiet">{means}</span>
-          {outcome.ok ? <Comes made={outcome.value} units={units} /> : <span className="way-not"><b>{id === 'leave-chosen' ? '' : 'Does not fit. '}</b>{[...new Set(outcome.problems.map(({ message }) => message))].join(' ')}</span>}
+          {outcome.ok && <span className="quiet">{means}</span>}
+          {outcome.ok ? <Comes made={outcome.value} units={units} /> : <span>{whyNot(found)}</span>}
         </span>
       </span>
+      {outcome.ok && <span className="way-picture" aria-hidden="true"><SmallCloth made={outcome.value} id={id} name={name} /></span>}
     </label>
   );
 }
@@ -109,7 +127,7 @@ function Comes({ made, units }: { made: Made & { readonly changes: readonly stri
   const told = changes.filter((says) => says.startsWith('Left out:') || says.startsWith('Take '));
   return (
     <>
-      <span className="way-comes num">{size}, {plan.ends.count} ends at {amountText(lengthOf(plan.ends.spacingMm, 'fine'), units)}, {hours} at the loom.</span>
+      <span className="way-comes">{size}, {plan.ends.count} ends at {amountText(lengthOf(plan.ends.spacingMm, 'fine'), units)}, {hours} at the loom.</span>
       {told.length > 0 && <span>{told.join(' ')}</span>}
     </>
   );

@@ -26,7 +26,10 @@ export interface PieceOnLoom {
   readonly height: Omit<LoomPlan, 'insideWidthNeededMm'>;
   readonly dressed: DressedWarp;
   readonly laid: DressedLoom;
+  /** Those that are still to be woven; all of them in the plan of a whole piece. */
   readonly stacked: readonly StackedBand[];
+  /** The loom is dressed already: winding the warp takes no more time. */
+  readonly isWarped?: true;
 }
 
 /** A band with what it takes. */
@@ -74,11 +77,11 @@ function planCut({ size, hanging, dressed, height }: PieceOnLoom, massG: number,
 }
 
 /** What there is to do in all bands, and the warp. */
-export function workOf(bands: readonly WovenBand[], { dressed, laid }: PieceOnLoom): Work {
+export function workOf(bands: readonly WovenBand[], { dressed, laid, isWarped }: PieceOnLoom): Work {
   const total = (of: keyof Work): number => bands.reduce((sum, { woven }) => sum + (woven.work[of] ?? 0), 0);
   return {
     workingEnds: laid.workingEnds,
-    warpEnds: dressed.ends.count,
+    warpEnds: isWarped === true ? 0 : dressed.ends.count,
     rows: total('rows'),
     colourChanges: total('colourChanges'),
     knots: total('knots'),
@@ -97,7 +100,7 @@ function planYarns(bands: readonly WovenBand[], { yarns, laid, settings }: Piece
 }
 
 export function weaveBands({ stacked, laid }: PieceOnLoom): readonly WovenBand[] {
-  return stacked.map((stack) => ({ ...stack, woven: techniqueOf(stack.band).weave(stack.band, stack.heightMm, laid) }));
+  return stacked.map((stack) => ({ ...stack, woven: techniqueOf(stack.band).weave(stack.band, stack.heightMm, laid, stack.fromRow) }));
 }
 
 /** Needs at least one yarn whose picks are laid, which laying the weft has seen to. */

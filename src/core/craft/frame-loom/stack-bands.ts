@@ -8,6 +8,8 @@ export interface StackedBand {
   readonly index: number;
   readonly band: Band;
   readonly heightMm: number;
+  /** Rows of a tabby band that are woven already. */
+  readonly fromRow?: number;
 }
 
 /** Heights measured by hand agree no closer. */

@@ -36,6 +36,8 @@ export type WarningCode =
   | 'W_SHORT_STITCH'
   | 'W_SLIT'
   | 'W_TIGHT'
+  | 'W_SHORT'
+  | 'W_ROOM'
   | 'W_UNUSED'
   | 'W_DOWEL';
 

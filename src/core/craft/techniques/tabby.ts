@@ -135,12 +135,14 @@ function rowsWithShapes(shapes: readonly PlacedShape[], rows: number): { readonl
   return { first, end };
 }
 
-function weave(band: TabbyBand, heightMm: number, loom: DressedLoom): Woven {
+function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0): Woven {
   const grid = gridOf(band, heightMm, loom);
   const shapes = (band.shapes ?? []).map((shape) => placeShape(shape, grid));
-  const { first, end } = rowsWithShapes(shapes, grid.rows);
+  const standing = rowsWithShapes(shapes, grid.rows);
+  const [first, end] = [Math.max(fromRow, standing.first), Math.max(fromRow, standing.end)];
+  const rows = Math.max(0, grid.rows - fromRow);
   const pickMm = (role: string): number => pickLength(loom.workingEnds, picksOn(loom, role));
-  const threadMm = new Map([[band.yarn, (grid.rows - (end - first)) * pickMm(band.yarn)]]);
+  const threadMm = new Map([[band.yarn, (rows - (end - first)) * pickMm(band.yarn)]]);
   let colourChanges = 0;
   for (let row = first; row < end; row += 1) {
     const areas = areasOfRow(row, band.yarn, shapes, grid.ends);
@@ -151,8 +153,8 @@ function weave(band: TabbyBand, heightMm: number, loom: DressedLoom): Woven {
     }
   }
   return {
-    picks: { role: band.yarn, rows: grid.rows, rawRows: heightMm / grid.pickSpacingMm },
-    counts: { picks: grid.rows },
+    picks: { role: band.yarn, rows, rawRows: Math.max(0, heightMm / grid.pickSpacingMm - fromRow) },
+    counts: { picks: rows },
     uses: [...threadMm].map(([role, mm]): YarnUse => ({
       role,
       carry: 'shuttle',
@@ -160,7 +162,7 @@ function weave(band: TabbyBand, heightMm: number, loom: DressedLoom): Woven {
       yarnMm: mm * threadOn(loom, role).strands,
       rowMm: pickMm(role),
     })),
-    work: { rows: grid.rows, colourChanges },
+    work: { rows, colourChanges },
   };
 }
 

@@ -90,7 +90,8 @@ export interface Technique<N extends TechniqueName> {
   /** Rows in which its shapes are stepped out, which is what reckoning a large piece takes its time for. */
   shapeRows?(band: BandByTechnique[N], loom: DressedLoom): number;
   check(band: BandByTechnique[N], heightMm: number, loom: DressedLoom, report: BandReport): void;
-  weave(band: BandByTechnique[N], heightMm: number, loom: DressedLoom): Woven;
+  /** `fromRow` leaves out so many rows that are woven already; only tabby, whose rows are not told by the band, heeds it. */
+  weave(band: BandByTechnique[N], heightMm: number, loom: DressedLoom, fromRow?: number): Woven;
 }
 
 /** @throws if the role is not among the loom's threads, which reading the piece has ruled out */
