@@ -70,6 +70,8 @@ export const HANGING = {
   modulusPa: 8e9,
   /** P: a sag of a 360th of the span is not seen. */
   sagLimit: 360,
+  /** P: what holds it up should bear so many times its weight. */
+  fixingFactor: 4,
   /** P: a dowel thinner than this is not sold straight. */
   leastStockMm: 8,
 } as const;

@@ -9,6 +9,8 @@ export interface AnswerLine {
   /** In words and signs. */
   readonly how: string;
   readonly trust: Trust;
+  /** Told first and largest. */
+  readonly loud?: true;
 }
 
 /** A sentence for each field that cannot be used. */
@@ -18,6 +20,13 @@ export interface Section {
   readonly lines: readonly AnswerLine[];
   /** What is worth knowing about the answer. */
   readonly notes: readonly string[];
+  /** Fields it cannot answer without. */
+  readonly needs: readonly ReckonerField[];
+  /** Something in it broke that never should. */
+  readonly failed?: true;
 }
 
-export const NO_ANSWER: Section = { lines: [], notes: [] };
+export const NO_ANSWER: Omit<Section, 'needs'> = { lines: [], notes: [] };
+
+/** Length, weight and balls of a yarn to have in hand. */
+export const loud = (line: AnswerLine): AnswerLine => ({ ...line, loud: true });

@@ -1,18 +1,15 @@
-/** From what was typed to what the reckoning takes. Errors are kept by field, the first one of each. */
-import type { Beat, EndsTogether, Loom, Parity, Warp, Yarn } from '#core/craft/piece.ts';
-import type { FieldErrors } from '#core/reckoner/answer-line.ts';
-import { unitOf, unitsOf, type LengthField, type ReckonerField, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
-import { METRES_PER_YARD } from '#core/craft/yarn/count.ts';
-import { MM_PER_INCH } from '#core/units/inches.ts';
-import { parseLength } from '#core/units/parse-length.ts';
-import type { Units } from '#core/units/units.ts';
+/** From what was typed to what the reckoning takes. */
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
+import { LOOM_KIND_NAMES, LOOM_KINDS, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
+import type { Beat, CountSystem, EndsTogether, Loom, Parity, Warp, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import { METRES_PER_YARD } from '#core/craft/yarn/count.ts';
+import { YARN_CLASSES } from '#core/craft/yarn/classes.ts';
+import type { FormReader } from '#core/reckoner/form-reader.ts';
+import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
+import { MM_PER_INCH } from '#core/units/inches.ts';
+import { GRAMS_PER_OUNCE } from '#core/units/parse-mass.ts';
 
-/** Ways to say how thick a yarn is, with the words for each. */
-export const YARN_WAYS = [
-  { value: 'metres', label: 'Metres in 100 g' },
-  { value: 'yards', label: 'Yards in an ounce' },
-  { value: 'tex', label: 'Tex' },
+const COUNT_WAYS = [
   { value: 'nm', label: 'Nm' },
   { value: 'ne-cotton', label: 'Cotton count' },
   { value: 'spun-silk', label: 'Spun silk' },
@@ -24,9 +21,20 @@ export const YARN_WAYS = [
   { value: 'grain', label: 'American grain' },
   { value: 'denier', label: 'Denier' },
   { value: 'dtex', label: 'Decitex' },
+] as const satisfies readonly { value: CountSystem; label: string }[];
+
+/** Ways to say how thick a yarn is, with the words for each. */
+export const YARN_WAYS = [
+  { value: 'metres', label: 'Metres in 100 g' },
+  { value: 'yards', label: 'Yards in an ounce' },
+  { value: 'yards-pound', label: 'Yards in a pound' },
+  { value: 'tex', label: 'Tex' },
+  ...COUNT_WAYS,
+  { value: 'class', label: 'Shops’ class, 0 to 7' },
 ] as const;
 
-export type YarnWay = (typeof YARN_WAYS)[number]['value'];
+/** Ways that take a plain number; the others a count as it stands on the label. */
+export const isPlainNumber = (way: string): boolean => !COUNT_WAYS.some(({ value }) => value === way);
 
 /** How firmly rows are beaten down, in picks to one thickness of the yarn. */
 export const BEATS = [
@@ -36,85 +44,42 @@ export const BEATS = [
   { value: 'swatch', label: 'I counted rows on a swatch', picks: 0 },
 ] as const;
 
-const GRAMS_PER_OUNCE = 28.349523125;
-
-export class FormReader {
-  readonly errors: FieldErrors = {};
-  readonly units: Units;
-
-  constructor(readonly form: ReckonerForm) {
-    this.units = unitsOf(form);
-  }
-
-  /** Keeps what is wrong with a field: the first thing found. */
-  refuse(field: ReckonerField, says: string): void {
-    this.errors[field] ??= says;
-  }
-
-  isSound(...fields: readonly ReckonerField[]): boolean {
-    return fields.every((field) => this.errors[field] === undefined);
-  }
-
-  text(field: ReckonerField): string {
-    return this.form[field].trim();
-  }
-
-  /** A length in mm; undefined if it cannot be read, and then the field says why. */
-  length(field: LengthField, name: string): number | undefined {
-    const unit = unitOf(field, this.units);
-    const parsed = parseLength(this.form[field], unit);
-    if (parsed.ok) return parsed.mm;
-    this.refuse(field, this.text(field) === '' ? `${name} is missing. Type it in ${unit}.` : parsed.reason);
-    return undefined;
-  }
-
-  optionalLength(field: LengthField, name: string): number | undefined {
-    return this.text(field) === '' ? undefined : this.length(field, name);
-  }
-
-  /** A plain number; comma and point are both decimal marks. */
-  number(field: ReckonerField, name: string): number | undefined {
-    const typed = this.text(field);
-    if (/^\d{1,9}(?:[.,]\d{1,9})?$/u.test(typed)) return Number(typed.replace(',', '.'));
-    this.refuse(field, typed === '' ? `${name} is missing. Type a number.` : `${name} is not a number. Type it like 12 or 12.5.`);
-    return undefined;
-  }
-
-  optionalNumber(field: ReckonerField, name: string): number | undefined {
-    return this.text(field) === '' ? undefined : this.number(field, name);
-  }
-
-  choice<const T extends string>(field: ReckonerField, options: readonly [T, ...T[]]): T {
-    return options.find((option) => option === this.form[field]) ?? options[0];
+function readPlain(reader: FormReader, way: string): { readonly tex: number } | { readonly metresPer100g: number } | { readonly class: (typeof YARN_CLASSES)[number]['number'] } | undefined {
+  const value = reader.number('yarn', 'The yarn');
+  if (value === undefined) return undefined;
+  switch (way) {
+    case 'tex': return { tex: value };
+    case 'yards': return { metresPer100g: (value * METRES_PER_YARD * 100) / GRAMS_PER_OUNCE };
+    case 'yards-pound': return { metresPer100g: (value * METRES_PER_YARD * 100) / (16 * GRAMS_PER_OUNCE) };
+    case 'class': {
+      const known = YARN_CLASSES.find(({ number }) => number === value);
+      if (known !== undefined) return { class: known.number };
+      reader.refuse('yarn', 'Shops’ classes go from 0, lace, to 7, jumbo.');
+      return undefined;
+    }
+    default: return { metresPer100g: value };
   }
 }
 
-type Grist = { readonly tex: number } | { readonly metresPer100g: number } | { readonly count: { readonly text: string; readonly system: Exclude<YarnWay, 'metres' | 'yards' | 'tex'> } };
-
-function readGrist(reader: FormReader): Grist | undefined {
-  const way = YARN_WAYS.find(({ value }) => value === reader.form['yarn-by'])?.value ?? 'metres';
-  if (way === 'metres' || way === 'yards' || way === 'tex') {
-    const value = reader.number('yarn', 'The yarn');
-    if (value === undefined) return undefined;
-    if (way === 'tex') return { tex: value };
-    return { metresPer100g: way === 'metres' ? value : (value * METRES_PER_YARD * 100) / GRAMS_PER_OUNCE };
-  }
+function readGrist(reader: FormReader) {
+  const system = COUNT_WAYS.find(({ value }) => value === reader.form['yarn-by'])?.value;
+  if (system === undefined) return readPlain(reader, reader.form['yarn-by']);
   const text = reader.text('yarn').replace(',', '.');
-  if (text !== '') return { count: { text, system: way } };
+  if (text !== '') return { count: { text, system } };
   reader.refuse('yarn', 'The count is missing. Write it like 8/2.');
   return undefined;
 }
 
 function readBall(reader: FormReader): { readonly ball?: { readonly metres: number; readonly grams: number } } {
-  const metres = reader.optionalNumber('ball-metres', 'Metres in a ball');
-  const grams = reader.optionalNumber('ball-grams', 'Grams of a ball');
-  if (reader.text('ball-metres') === '' && reader.text('ball-grams') !== '') reader.refuse('ball-metres', 'How many metres weigh that? Type both, or neither.');
-  if (reader.text('ball-grams') === '' && reader.text('ball-metres') !== '') reader.refuse('ball-grams', 'How much do those metres weigh? Type both, or neither.');
-  return metres === undefined || grams === undefined ? {} : { ball: { metres, grams } };
+  const mm = reader.optionalLength('ball-length', 'Length of a ball');
+  const grams = reader.isEmpty('ball-weight') ? undefined : reader.weight('ball-weight', 'Weight of a ball');
+  if (reader.isEmpty('ball-length') && !reader.isEmpty('ball-weight')) reader.refuse('ball-length', 'How long is the yarn that weighs that? Type both, or neither.');
+  if (reader.isEmpty('ball-weight') && !reader.isEmpty('ball-length')) reader.refuse('ball-weight', 'How much does that length weigh? Type both, or neither.');
+  return mm === undefined || grams === undefined ? {} : { ball: { metres: mm / 1000, grams } };
 }
 
 /** Fields that describe the yarn. */
-export const YARN_FIELDS = ['yarn', 'ball-metres', 'ball-grams', 'wraps', 'strands'] as const satisfies readonly ReckonerField[];
+export const YARN_FIELDS = ['yarn', 'ball-length', 'ball-weight', 'wraps', 'strands'] as const satisfies readonly ReckonerField[];
 
 /**
  * The yarn, as far as its fields can be read; the reckoning itself tells what of it is
@@ -135,6 +100,9 @@ export function readTypedYarn(reader: FormReader): Yarn | undefined {
   };
 }
 
+/** Fields that decide the number of ends. */
+export const SETT_FIELDS = ['width', 'nails', 'every', 'warp-tex', 'draw-in', 'together', 'parity'] as const satisfies readonly ReckonerField[];
+
 export interface TypedLoom {
   readonly widthMm: number;
   readonly loom: Omit<Loom, 'insideHeightMm'>;
@@ -146,25 +114,49 @@ export interface TypedLoom {
 export function readTypedLoom(reader: FormReader): TypedLoom | undefined {
   const widthMm = reader.length('width', 'Width');
   const nailPitchMm = reader.length('nails', 'Nail spacing');
+  const everyNthNail = reader.number('every', 'Which nails');
   const tex = reader.number('warp-tex', 'Tex of the warp');
   const drawIn = reader.number('draw-in', 'Draw-in');
-  const insideWidthMm = reader.optionalLength('frame-width', 'Inside width of the frame');
-  if (widthMm === undefined || nailPitchMm === undefined || tex === undefined || drawIn === undefined) return undefined;
+  if (widthMm === undefined || nailPitchMm === undefined || everyNthNail === undefined || tex === undefined || drawIn === undefined) return undefined;
+  const kind = reader.choice('loom-kind', LOOM_KIND_NAMES);
   const endsTogether: EndsTogether = reader.choice('together', ['1', '2']) === '2' ? 2 : 1;
   const parity: Parity = reader.choice('parity', ['any', 'even', 'odd']);
   return {
     widthMm,
-    loom: { nailPitchMm, warping: reader.choice('warping', ['zigzag', 'two-nail']), ...(insideWidthMm === undefined ? {} : { insideWidthMm }) },
+    loom: {
+      kind,
+      nailPitchMm,
+      everyNthNail,
+      warping: LOOM_KINDS[kind].warpings.length === 1 ? LOOM_KINDS[kind].warpings[0] : reader.choice('warping', ['zigzag', 'two-nail']),
+      ...(LOOM_KINDS[kind].rows === 2 ? { nailRows: reader.choice('nail-rows', NAIL_ROW_NAMES) } : {}),
+    },
     warp: { yarn: { tex }, endsTogether, parity },
     drawIn: drawIn / 100,
   };
 }
 
+/** Fields that decide how rows lie. */
+export const ROW_FIELDS = ['height', 'swatch'] as const satisfies readonly ReckonerField[];
+
+export interface TypedRows {
+  readonly heightMm: number;
+  readonly beat: Beat;
+  readonly mode: WeaveMode;
+}
+
 /** How close rows lie: by the yarn, or as counted in a centimetre or an inch. */
-export function readTypedBeat(reader: FormReader): Beat | undefined {
+function readBeat(reader: FormReader): Beat | undefined {
   const beat = BEATS.find(({ value }) => value === reader.form.beat) ?? BEATS[0];
   if (beat.value !== 'swatch') return { picksPerWeftDiameter: beat.picks };
   const rows = reader.number('swatch', reader.units === 'in' ? 'Rows in an inch' : 'Rows in a centimetre');
   if (rows === undefined) return undefined;
   return { picksPerCm: reader.units === 'in' ? (rows * 10) / MM_PER_INCH : rows };
+}
+
+/** Height, beat and which yarn bends. */
+export function readTypedRows(reader: FormReader): TypedRows | undefined {
+  const heightMm = reader.length('height', 'Height');
+  const beat = readBeat(reader);
+  if (heightMm === undefined || beat === undefined) return undefined;
+  return { heightMm, beat, mode: reader.choice('weave', ['straight-warp', 'balanced']) };
 }

@@ -4,6 +4,7 @@
  */
 import { METRES_PER_YARD } from '#core/craft/yarn/count.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
+import { readTypedNumber, spellOut } from '#core/units/typed-number.ts';
 
 export type ParsedLength = { readonly ok: true; readonly mm: number } | { readonly ok: false; readonly reason: string };
 
@@ -40,55 +41,25 @@ const UNIT_WORDS: ReadonlyMap<string, LengthUnit> = new Map([
   ['yards', 'yd'],
 ]);
 
-const VULGAR: ReadonlyMap<string, string> = new Map([
-  ['½', '1/2'],
-  ['¼', '1/4'],
-  ['¾', '3/4'],
-  ['⅛', '1/8'],
-  ['⅜', '3/8'],
-  ['⅝', '5/8'],
-  ['⅞', '7/8'],
-]);
-
+const ONE_LENGTH = 'Write one length, like 12.5 or 4 7/8.';
 const LONGEST_TEXT = 40;
 const SHAPE = /^(?<number>[\d.,/ -]+?) ?(?<unit>[a-z.]+|["″”'′’])?$/i;
-const DECIMAL = /^\d+(?:[.,]\d+)?$|^[.,]\d+$/;
-const FRACTION = /^(?:(?<whole>\d+)[ -])?(?<numerator>\d+) ?\/ ?(?<denominator>\d+)$/;
 
 const no = (reason: string): ParsedLength => ({ ok: false, reason });
-
-function plain(text: string): string {
-  const spelled = text.replace(/[½¼¾⅛⅜⅝⅞]/gu, (sign) => ` ${VULGAR.get(sign) ?? sign}`);
-  return spelled.replace(/[\s\u2044]+/gu, (gap) => (gap.includes('\u2044') ? '/' : ' ')).trim();
-}
-
-function readFraction(text: string): number | string {
-  const { whole = '0', numerator, denominator } = FRACTION.exec(text)?.groups ?? {};
-  if (numerator === undefined || denominator === undefined) return 'Write one length, like 12.5 or 4 7/8.';
-  if (Number(denominator) === 0) return 'A fraction cannot have 0 below its line.';
-  return Number(whole) + Number(numerator) / Number(denominator);
-}
-
-function readNumber(text: string): number | string {
-  if (text.includes('/')) return readFraction(text);
-  if (DECIMAL.test(text)) return Number(text.replace(',', '.'));
-  if (/[.,].*[.,]/u.test(text)) return 'Write one comma or point only, and leave out marks between thousands.';
-  return 'Write one length, like 12.5 or 4 7/8.';
-}
 
 /**
  * Reads a length; without a unit it is in `unit`. The reason, when it cannot be read, is
  * a sentence for the person who typed it.
  */
 export function parseLength(typed: string, unit: LengthUnit): ParsedLength {
-  const text = plain(typed);
+  const text = spellOut(typed);
   if (text === '') return no(`Type a length in ${unit}.`);
   if (text.length > LONGEST_TEXT) return no('That is too long for a length.');
   if (/^[-−–]/u.test(text)) return no('A length cannot be below 0.');
   const { number, unit: unitWord } = SHAPE.exec(text)?.groups ?? {};
-  if (number === undefined) return no('Write one length, like 12.5 or 4 7/8.');
+  if (number === undefined) return no(ONE_LENGTH);
   const known = unitWord === undefined ? unit : UNIT_WORDS.get(unitWord.toLowerCase());
   if (known === undefined) return no(`“${unitWord ?? ''}” is no unit we know. Write mm, cm, m, in, ft or yd.`);
-  const value = readNumber(number.trim());
+  const value = readTypedNumber(number.trim(), ONE_LENGTH);
   return typeof value === 'string' ? no(value) : { ok: true, mm: value * MM_PER_UNIT[known] };
 }

@@ -1,90 +1,111 @@
 /**
- * The reckoner: one form of three parts that feed each other. Drawn on the server it works
+ * The reckoner: one form of eight parts that feed each other. Drawn on the server it works
  * by sending the form; alive it answers while one types, with the same core.
  */
-import { useEffect, useMemo, useReducer, type ReactNode } from 'react';
+import { useEffect, useMemo, useReducer, useRef, useState, type ReactNode, type RefObject } from 'react';
 import { answerForm, type ReckonerAnswer } from '#core/reckoner/answer-form.ts';
-import { changeField, reckonerQuery, unitsOf, type ReckonerField, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
+import { changeField, RECKONER_FIELDS, reckonerQuery, unitsOf, type ReckonerField, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
 import { amountText } from '#core/units/format-amount.ts';
-import { AnswerTable } from '#islands/reckoner/AnswerTable.tsx';
+import type { Units } from '#core/units/units.ts';
+import { Answers } from '#islands/reckoner/Answers.tsx';
+import { ClothFields } from '#islands/reckoner/ClothFields.tsx';
 import type { FormHand } from '#islands/reckoner/form-hand.ts';
-import { LoomFields } from '#islands/reckoner/LoomFields.tsx';
+import { LinkTools } from '#islands/reckoner/LinkTools.tsx';
+import { Offered } from '#islands/reckoner/Offered.tsx';
+import { Part } from '#islands/reckoner/Part.tsx';
+import { PARTS, type PartName } from '#islands/reckoner/parts.ts';
 import { PieceFields } from '#islands/reckoner/PieceFields.tsx';
 import { PieceSum } from '#islands/reckoner/PieceSum.tsx';
+import { SettFields } from '#islands/reckoner/SettFields.tsx';
+import { ShapeFields } from '#islands/reckoner/ShapeFields.tsx';
+import { ShapeSum } from '#islands/reckoner/ShapeSum.tsx';
+import { RodFields, RyaFields, SoumakFields } from '#islands/reckoner/StitchFields.tsx';
+import { Typed } from '#islands/reckoner/Typed.tsx';
 import { YarnFields } from '#islands/reckoner/YarnFields.tsx';
-import { Button } from '#islands/ui/Button.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
+
+const FIELDS: Readonly<Record<PartName, (props: { hand: FormHand }) => ReactNode>> = {
+  yarn: YarnFields, sett: SettFields, cloth: ClothFields, soumak: SoumakFields, rya: RyaFields, shape: ShapeFields, rod: RodFields, piece: PieceFields,
+};
 
 /** The address follows the form after a pause in typing, so that it can be kept or sent. */
 const ADDRESS_PAUSE_MS = 500;
 
-function useAddress(form: ReckonerForm, initial: ReckonerForm): void {
+function useAddress(form: ReckonerForm, initial: ReckonerForm): string {
+  const address = `/reckoner?${reckonerQuery(form)}`;
   useEffect(() => {
     if (form === initial) return undefined;
-    const timer = setTimeout(() => {
-      const query = reckonerQuery(form);
-      history.replaceState(history.state, '', `${location.pathname}${query === '' ? '' : `?${query}`}${location.hash}`);
-    }, ADDRESS_PAUSE_MS);
+    const timer = setTimeout(() => { history.replaceState(history.state, '', `${address}${location.hash}`); }, ADDRESS_PAUSE_MS);
     return () => { clearTimeout(timer); };
-  }, [form, initial]);
+  }, [form, initial, address]);
+  return address;
 }
 
-interface PartProps {
-  readonly id: string;
-  readonly title: string;
-  readonly says: string;
-  readonly fields: ReactNode;
-  readonly last?: boolean;
-  readonly children: ReactNode;
+/** What was typed before the browser had read this script stands in the fields already. */
+function typedBefore(element: HTMLFormElement, form: ReckonerForm): readonly (readonly [ReckonerField, string])[] {
+  const data = new FormData(element);
+  return RECKONER_FIELDS.flatMap((field) => {
+    const value = data.get(field);
+    return typeof value === 'string' && value !== form[field] ? [[field, value] as const] : [];
+  });
 }
 
-function Part({ id, title, says, fields, last = false, children }: PartProps) {
-  return (
-    <section className="pick mt-7 scroll-mt-4 desk:grid desk:grid-cols-[340px_minmax(0,1fr)] desk:gap-7" aria-labelledby={id}>
-      <div className="desk:sticky desk:top-4 desk:self-start">
-        <h2 className="h2" id={id}>{title}</h2>
-        <p className="small quiet mt-1">{says}</p>
-        <div className="mt-4 grid content-start gap-4">
-          {fields}
-          <div><Button type="submit" kind={last ? 'act' : 'plain'}>Reckon</Button></div>
-        </div>
-      </div>
-      <div className="mt-5 min-w-0 desk:mt-0">{children}</div>
-    </section>
-  );
+function useForm(initial: ReckonerForm, element: RefObject<HTMLFormElement | null>) {
+  const [form, change] = useReducer((now: ReckonerForm, [field, value]: readonly [ReckonerField, string]) => changeField(now, field, value), initial);
+  const [alive, setAlive] = useState(false);
+  useEffect(() => {
+    setAlive(true);
+    if (element.current !== null) for (const typed of typedBefore(element.current, initial)) change(typed);
+  }, []);
+  return { form, change, alive };
 }
 
 /** What changed, for who cannot see it: the sum of the piece, or that something cannot be used. */
-function inWords({ errors, piece }: ReckonerAnswer, form: ReckonerForm): string {
+function inWords({ errors, piece }: ReckonerAnswer, units: Units): string {
   const wrong = Object.keys(errors).length;
   if (wrong > 0) return wrong === 1 ? 'One field cannot be used yet.' : `${String(wrong)} fields cannot be used yet.`;
   return piece.lines
     .slice(0, 2)
-    .map(({ label, value }) => (value.kind === 'words' ? value.words : `${label}: ${amountText(value, unitsOf(form))}`))
+    .map(({ label, value }) => (value.kind === 'words' ? value.words : `${label}: ${amountText(value, units)}`))
     .join(', ');
 }
 
+/** What a part has beside its lines: drawings before them, tables after. */
+function extras({ sett, shape, piece }: ReckonerAnswer, form: ReckonerForm): Partial<Record<PartName, { readonly before?: ReactNode; readonly after?: ReactNode }>> {
+  const units = unitsOf(form);
+  return {
+    sett: { after: sett.offered && <Offered spacings={sett.offered} kind={form['loom-kind']} units={units} /> },
+    shape: { before: <ShapeSum section={shape} /> },
+    piece: { before: piece.made && <PieceSum made={piece.made} units={units} /> },
+  };
+}
+
 export function Reckoner({ initial }: { initial: ReckonerForm }) {
-  const [form, change] = useReducer((now: ReckonerForm, [field, value]: readonly [ReckonerField, string]) => changeField(now, field, value), initial);
+  const element = useRef<HTMLFormElement>(null);
+  const { form, change, alive } = useForm(initial, element);
   const answer = useMemo(() => answerForm(form), [form]);
+  const address = useAddress(form, initial);
   const units = unitsOf(form);
   const hand: FormHand = { form, errors: answer.errors, change: (field, value) => { change([field, value]); } };
-  useAddress(form, initial);
+  const more = extras(answer, form);
   return (
-    <form method="get" action="/reckoner" noValidate>
+    <form ref={element} className="reckoner" method="get" action="/reckoner" noValidate>
       <input type="hidden" name="shown" value={units} />
-      <Choose name="units" legend="Units" quietLegend options={[{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }]} value={units} onChoose={(chosen) => { change(['units', chosen]); }} />
-      <p className="hide" role="status">{inWords(answer, form)}</p>
-      <Part id="yarn" title="One yarn" says="Every way its thickness is told, and how thick it lies." fields={<YarnFields hand={hand} />}>
-        <AnswerTable caption="The yarn in every count" section={answer.yarn} errors={answer.errors} units={units} />
-      </Part>
-      <Part id="ends" title="Ends and spacing" says="From a width and a row of nails to warp ends." fields={<LoomFields hand={hand} />}>
-        <AnswerTable caption="Ends, nails and spacing" section={answer.ends} errors={answer.errors} units={units} />
-      </Part>
-      <Part id="piece" title="A whole hanging" says="Woven in this yarn on these ends. Amounts are those to have in hand, with a reserve." last fields={<PieceFields hand={hand} />}>
-        <PieceSum piece={answer.piece} units={units} />
-        <AnswerTable caption="Everything the piece takes" section={answer.piece} errors={answer.errors} units={units} />
-      </Part>
+      <div className="row between">
+        <Choose name="units" legend="Units" quietLegend options={[{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }]} value={units} onChoose={(chosen) => { change(['units', chosen]); }} />
+        <LinkTools address={address} alive={alive} />
+      </div>
+      <p className="hide" role="status">{inWords(answer, units)}</p>
+      {PARTS.map(({ name, title, says, fields }) => {
+        const Fields = FIELDS[name];
+        return (
+          <Part key={name} id={name} title={title} says={says} alive={alive} fields={<Fields hand={hand} />} typed={<Typed form={form} fields={fields} />}>
+            {more[name]?.before}
+            <Answers caption={title} section={answer[name]} errors={answer.errors} units={units} />
+            {more[name]?.after}
+          </Part>
+        );
+      })}
     </form>
   );
 }

@@ -1,24 +1,22 @@
-import { YARN_WAYS } from '#core/reckoner/read-fields.ts';
-import { FIELD_LABELS } from '#core/reckoner/field-labels.ts';
-import { chosenField, typedField, type FormHand } from '#islands/reckoner/form-hand.ts';
+import { isPlainNumber, YARN_WAYS } from '#core/reckoner/read-fields.ts';
+import { chosenField, countedField, listedField, typedField, type FormHand } from '#islands/reckoner/form-hand.ts';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { Field, Select } from '#islands/ui/Field.tsx';
 
 /** What a label says of a yarn, and what can be measured on it. */
 export function YarnFields({ hand }: { hand: FormHand }) {
-  const { form, change } = hand;
-  const isPlainNumber = ['metres', 'yards', 'tex'].includes(form['yarn-by']);
+  const plain = isPlainNumber(hand.form['yarn-by']);
   return (
     <>
-      <Select name="yarn-by" label={FIELD_LABELS['yarn-by']} value={form['yarn-by']} options={YARN_WAYS} onChange={({ target }) => { change('yarn-by', target.value); }} />
-      <Field hint={isPlainNumber ? undefined : 'As it stands there, such as 16 or 8/2.'} {...typedField(hand, 'yarn')} inputMode={isPlainNumber ? 'decimal' : 'text'} />
+      <Select {...listedField(hand, 'yarn-by')} options={YARN_WAYS} />
+      <Field hint={plain ? undefined : 'As it stands there, such as 16 or 8/2.'} {...typedField(hand, 'yarn')} inputMode={plain ? 'decimal' : 'text'} />
       <div className="two">
-        <Field {...typedField(hand, 'ball-metres')} unit="m" />
-        <Field {...typedField(hand, 'ball-grams')} unit="g" />
+        <Field {...typedField(hand, 'ball-length')} />
+        <Field {...typedField(hand, 'ball-weight')} />
       </div>
       <div className="two">
         <Field {...typedField(hand, 'wraps')} />
-        <Field {...typedField(hand, 'strands')} inputMode="numeric" />
+        <Field {...countedField(hand, 'strands')} />
       </div>
       <p className="hint">Ball and wraps may stay empty. Wraps you count beat any rule.</p>
       <Choose

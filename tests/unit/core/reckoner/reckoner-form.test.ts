@@ -26,6 +26,11 @@ describe('the form an address describes', () => {
     expect(read('units=cm&shown=in&width=12')).toMatchObject({ units: 'cm', width: '30.5' });
   });
 
+  test('stands in a person’s own units where the address names none', () => {
+    expect(readReckonerForm(new URLSearchParams('width=12'), 'in')).toMatchObject({ units: 'in', width: '12', height: '15 3/4' });
+    expect(readReckonerForm(new URLSearchParams('units=cm'), 'in')).toEqual(RECKONER_DEFAULTS);
+  });
+
   test('knows no units but two, and nothing longer than a field', () => {
     expect(read('units=furlong&shown=ell').units).toBe('cm');
     expect(read(`yarn=${'9'.repeat(5000)}`).yarn).toHaveLength(60);
@@ -33,9 +38,9 @@ describe('the form an address describes', () => {
 });
 
 describe('the address of a form', () => {
-  test('leaves out what stands as at first', () => {
-    expect(reckonerQuery(RECKONER_DEFAULTS)).toBe('');
-    expect(reckonerQuery(changeField(RECKONER_DEFAULTS, 'width', '20'))).toBe('width=20');
+  test('names its units and leaves out what stands as at first', () => {
+    expect(reckonerQuery(RECKONER_DEFAULTS)).toBe('units=cm');
+    expect(reckonerQuery(changeField(RECKONER_DEFAULTS, 'width', '20'))).toBe('units=cm&width=20');
     expect(reckonerQuery(changeUnits(RECKONER_DEFAULTS, 'in'))).toBe('units=in');
   });
 
@@ -44,6 +49,7 @@ describe('the address of a form', () => {
       fc.property(fc.constantFrom(...RECKONER_FIELDS.filter((field) => field !== 'units')), fc.string({ maxLength: 30 }), fc.constantFrom('cm' as const, 'in' as const), (field, value, units) => {
         const form = changeField(changeUnits(RECKONER_DEFAULTS, units), field, value);
         expect(read(reckonerQuery(form))).toEqual(form);
+        expect(readReckonerForm(new URLSearchParams(reckonerQuery(form)), 'in')).toEqual(form);
       }),
       { numRuns: 500, seed: 1 },
     );
@@ -51,6 +57,12 @@ describe('the address of a form', () => {
 });
 
 describe('changing units', () => {
+  test('turns weights, balls and counted rows, too', () => {
+    const form = { ...RECKONER_DEFAULTS, 'ball-length': '90', 'ball-weight': '50', swatch: '6', 'rod-load': '1 3/4 kg' };
+    expect(changeUnits({ ...form, 'rod-load': '600' }, 'in')).toMatchObject({ 'ball-length': '98.4', 'ball-weight': '1.76', swatch: '15.24', 'rod-load': '21.16' });
+    expect(changeUnits(form, 'in')).toMatchObject({ 'rod-load': '61.73' });
+  });
+
   test('turns every length and nothing else', () => {
     const inches = changeField(RECKONER_DEFAULTS, 'units', 'in');
     expect(inches).toMatchObject({ units: 'in', width: '11 13/16', height: '15 3/4', dowel: '1/2', 'warp-tex': '400', yarn: '180' });
