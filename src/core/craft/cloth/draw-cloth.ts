@@ -72,6 +72,7 @@ function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
     pxPerMm,
     minPick: Math.max(minPick, height / MOST_ROWS),
     begin: beginOf(piece, view),
+    firstRow: 0,
     endsTogether: piece.endsTogether,
     plied: minPick >= PLIED_FROM,
     warpColour: piece.warpColour,

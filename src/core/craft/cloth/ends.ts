@@ -13,13 +13,25 @@ export function drawEnds(top: number, bottom: number, weave: Weave, x0 = 0, x1 =
   return strokeEnds(`M${num(x0)} ${num(top + height / 2)}H${num(x1)}`, height, weave);
 }
 
+/** Every second end, from the left of the screen: those that lie over something broad which goes under them. */
+export function drawEverySecondEnd(top: number, bottom: number, first: 0 | 1, weave: Weave): string {
+  const height = bottom - top;
+  const d = `M0 ${num(top + height / 2)}H${num(weave.width)}`;
+  return plainEnds(d, height, weave, (width, off) => dashes(width, 2 * weave.end - width, (first + 0.5) * weave.end - width / 2 + off));
+}
+
 /** The ends under lying lines of a given thickness. Every line begins at a multiple of two ends. */
 export function strokeEnds(d: string, height: number, weave: Weave): string {
   if (weave.endsTogether === 2 && weave.end >= DOUBLED_FROM) return drawDoubled(d, height, weave);
+  return plainEnds(d, height, weave, (width, off) => eachEnd(weave, width, off));
+}
+
+/** @param at the dashes of threads so wide, so far beside the middle of their ends */
+function plainEnds(d: string, height: number, weave: Weave, at: (width: number, off: number) => string): string {
   const { warpColour, warpWidth: width, paths } = weave;
-  let drawn = paths.stroke(d, shade(warpColour, 0.45), height, eachEnd(weave, width, 0));
-  drawn += paths.stroke(d, warpColour, height, eachEnd(weave, width * 0.68, -width * 0.08));
-  if (width > 1.8) drawn += paths.stroke(d, light(warpColour, 0.6), height, eachEnd(weave, width * 0.2, -width * 0.16));
+  let drawn = paths.stroke(d, shade(warpColour, 0.45), height, at(width, 0));
+  drawn += paths.stroke(d, warpColour, height, at(width * 0.68, -width * 0.08));
+  if (width > 1.8) drawn += paths.stroke(d, light(warpColour, 0.6), height, at(width * 0.2, -width * 0.16));
   return drawn;
 }
 

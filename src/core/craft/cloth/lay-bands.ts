@@ -1,5 +1,5 @@
 /** Where each band of a piece lies on the screen, how much of it is woven, and the cloth that makes. */
-import { drawBand, type LaidBand } from '#core/craft/cloth/bands/draw-band.ts';
+import { drawBand, picksDrawn, type LaidBand } from '#core/craft/cloth/bands/draw-band.ts';
 import { drawHemStitch } from '#core/craft/cloth/bands/hem-stitch.ts';
 import type { HemStitchBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { num } from '#core/craft/cloth/markup.ts';
@@ -12,6 +12,8 @@ interface Laid {
   readonly height: number;
   /** Woven part of the height. */
   readonly done: number;
+  /** Picks drawn before it. */
+  readonly firstRow: number;
 }
 
 interface Hem {
@@ -65,12 +67,14 @@ function place(piece: WovenPiece, scale: number, height: number, wovenPx: number
   const laid: Laid[] = [];
   const hems: Hem[] = [];
   let at = 0;
+  let firstRow = 0;
   for (const band of piece.bands) {
     const full = band.heightMm * scale;
     if (band.technique === 'hem-stitch') {
       if (at <= wovenPx + 0.5) hems.push({ band, at, cloth: laid.length === 0 ? 'after' : 'before' });
     } else if (Math.min(full, wovenPx - at) > 0.5) {
-      laid.push({ band, top: weave.begin === 'head' ? at : height - at - full, height: full, done: Math.min(full, wovenPx - at) });
+      laid.push({ band, top: weave.begin === 'head' ? at : height - at - full, height: full, done: Math.min(full, wovenPx - at), firstRow });
+      firstRow += picksDrawn(band, full, weave);
     }
     at += full;
   }
@@ -79,7 +83,7 @@ function place(piece: WovenPiece, scale: number, height: number, wovenPx: number
 
 /** Rows of a band that is only partly woven stay where they are while it grows: it is drawn whole and cut at the fell. */
 function drawLaid(item: Laid, cut: boolean, weave: Weave): string {
-  const inner = drawBand(item.band, item.height, weave);
+  const inner = drawBand(item.band, item.height, { ...weave, firstRow: item.firstRow });
   const clipped = cut ? `<g clip-path="url(#${weave.id}-cut)">${inner}</g>` : inner;
   return `<g transform="translate(0 ${num(item.top)})">${clipped}</g>`;
 }

@@ -1,8 +1,9 @@
 /** The frame a piece is woven in: four bars, nails with the warp round them, and the shuttle where the last row ended. */
 import { shade } from '#core/craft/cloth/colour.ts';
-import { drawEnds } from '#core/craft/cloth/ends.ts';
+import { drawEnds, drawEverySecondEnd } from '#core/craft/cloth/ends.ts';
 import { ROUND, dashes, num } from '#core/craft/cloth/markup.ts';
-import type { Weave } from '#core/craft/cloth/weave.ts';
+import { firstOver, type Weave } from '#core/craft/cloth/weave.ts';
+import { CARD_ROW } from '#core/craft/interlacement/lay.ts';
 
 const WOOD = '#b9aa8d';
 const WOOD_DARK = '#6f6250';
@@ -32,7 +33,7 @@ export function drawWarpOnNails(top: number, bottom: number, weave: Weave): stri
   return drawEnds(top, bottom, weave) + weave.paths.stroke(d, NAIL, thick, each);
 }
 
-/** The card that holds the first row up from the nails: it goes over one end and under the next like a broad pick. */
+/** The card that holds the first row up from the nails: like a broad pick below the first one, it goes over the ends that row goes under. */
 export function drawSpacerCard(top: number, height: number, weave: Weave): string {
   const out = Math.min(10, weave.width * 0.03);
   const y = top + height / 2;
@@ -40,7 +41,7 @@ export function drawSpacerCard(top: number, height: number, weave: Weave): strin
   return (
     weave.paths.stroke(whole, shade(CARD, 0.28), height) +
     weave.paths.stroke(whole, CARD, Math.max(0.5, height - 2)) +
-    drawEnds(top, top + height, { ...weave, end: weave.end * 2, endsTogether: 1 }, 0, weave.width)
+    drawEverySecondEnd(top, top + height, firstOver(CARD_ROW, weave) === 0 ? 1 : 0, weave)
   );
 }
 

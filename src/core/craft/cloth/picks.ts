@@ -6,12 +6,13 @@
  */
 import { light, shade } from '#core/craft/cloth/colour.ts';
 import { ROUND, dashes, moved, num } from '#core/craft/cloth/markup.ts';
-import type { Weave } from '#core/craft/cloth/weave.ts';
+import { firstOver, rowOnScreen, type Weave } from '#core/craft/cloth/weave.ts';
 
 /** One pick on the screen. `x0` is a multiple of two ends, so that dashes keep step with the warp. */
 export interface PickRow {
   readonly y: number;
-  readonly odd: boolean;
+  /** Counted from the first one woven. */
+  readonly row: number;
   readonly x0: number;
   readonly x1: number;
 }
@@ -31,8 +32,9 @@ const BOWED_ROWS = 100;
 /** Near, rows from here on show the plies of their yarn and a shade along their lower side. */
 const PLIED_FROM = 9;
 
-export function rowsOver(count: number, pitch: number, top: number, width: number): PickRow[] {
-  return Array.from({ length: count }, (_, row) => ({ y: top + (row + 0.5) * pitch, odd: row % 2 === 1, x0: 0, x1: width }));
+/** Rows over the whole width, from above. */
+export function rowsOver(count: number, pitch: number, top: number, weave: Weave): PickRow[] {
+  return Array.from({ length: count }, (_, index) => ({ y: top + (index + 0.5) * pitch, row: rowOnScreen(index, count, weave), x0: 0, x1: weave.width }));
 }
 
 /**
@@ -44,14 +46,15 @@ export function drawPicks(rows: readonly PickRow[], pitch: number, colour: strin
   const { whole, lots } = sortRows(rows, pitch, weave);
   let under = weave.paths.stroke(whole, shade(colour, 0.4), thick * 0.9);
   if (weave.plied && pitch >= PLIED_FROM) under += weave.paths.stroke(whole, shade(colour, 0.22), thick * 0.5, moved(0, -pitch * 0.08));
-  const bead = beadOf(weave.end, thick, cover);
+  const bead = beadLength(weave.end, thick, cover);
   const over = lots.map((lot) => drawBeads(lot, pitch, thick, bead, colour, weave)).join('');
   return { under, over };
 }
 
 interface Lot {
   readonly d: string;
-  readonly odd: boolean;
+  /** First end it goes over. */
+  readonly over: 0 | 1;
   /** 0 a little darker, 1 as dyed, 2 a little lighter. */
   readonly tone: number;
 }
@@ -66,24 +69,23 @@ function sortRows(rows: readonly PickRow[], pitch: number, weave: Weave): { whol
     const bow = bowed ? (weave.chance() - 0.5) * Math.min(pitch * 0.5, width * 0.02) : 0;
     const d = `M${num(row.x0)} ${num(row.y)}` + (bow === 0 ? `h${num(width)}` : `q${num(width / 2)} ${num(bow)} ${num(width)} 0`);
     whole += d;
-    const lot = (row.odd ? 1 : 0) + 2 * Math.floor(weave.chance() * 3);
+    const lot = firstOver(row.row, weave) + 2 * Math.floor(weave.chance() * 3);
     found[lot] = (found[lot] ?? '') + d;
   }
-  const lots = found.map((d, lot) => ({ d, odd: lot % 2 === 1, tone: lot >> 1 })).filter((lot) => lot.d !== '');
+  const lots = found.map((d, lot) => ({ d, over: lot % 2 === 1 ? (1 as const) : (0 as const), tone: lot >> 1 })).filter((lot) => lot.d !== '');
   return { whole, lots };
 }
 
-/** Length of one float without its round ends, and where the first one begins in even and odd rows. */
-function beadOf(end: number, thick: number, cover: number): { length: number; starts: readonly [number, number] } {
-  const length = Math.max(0.4, end * (1.04 + 0.6 * cover) - thick * 0.86);
-  return { length, starts: [0.5 * end - length / 2, 1.5 * end - length / 2] };
+/** Length of one float without its round ends. */
+function beadLength(end: number, thick: number, cover: number): number {
+  return Math.max(0.4, end * (1.04 + 0.6 * cover) - thick * 0.86);
 }
 
-function drawBeads(lot: Lot, pitch: number, thick: number, bead: ReturnType<typeof beadOf>, colour: string, weave: Weave): string {
+function drawBeads(lot: Lot, pitch: number, thick: number, bead: number, colour: string, weave: Weave): string {
   const { paths } = weave;
-  const start = bead.starts[lot.odd ? 1 : 0];
+  const start = (lot.over + 0.5) * weave.end - bead / 2;
   const repeat = 2 * weave.end;
-  const dash = dashes(bead.length, repeat - bead.length, start) + ROUND;
+  const dash = dashes(bead, repeat - bead, start) + ROUND;
   const tone = [shade(colour, 0.06), colour, light(colour, 0.06)][lot.tone] ?? colour;
   const near = weave.plied && pitch >= PLIED_FROM;
   const lit = pitch >= LIT_FROM;
@@ -95,8 +97,8 @@ function drawBeads(lot: Lot, pitch: number, thick: number, bead: ReturnType<type
     drawn += paths.stroke(lot.d, plyPaint(weave.id, colour), thick * 0.84, dash);
   }
   if (lit) {
-    const shine = bead.length * 0.86;
-    const shineDash = dashes(shine, repeat - shine, start + bead.length * 0.07) + ROUND;
+    const shine = bead * 0.86;
+    const shineDash = dashes(shine, repeat - shine, start + bead * 0.07) + ROUND;
     drawn += paths.stroke(lot.d, light(tone, near ? 0.3 : 0.22), thick * 0.24, shineDash + moved(0, -thick * 0.2));
   }
   return drawn;

@@ -1,11 +1,11 @@
 /**
- * Weft turning round the last end: at the right after even rows, at the left after odd ones. It lies under the beads.
+ * Weft turning round the last end, at the right and at the left in turn. It lies under the beads.
  * A row that does not reach the edge does not turn there.
  */
 import { shade } from '#core/craft/cloth/colour.ts';
 import { ROUND, dashes, num } from '#core/craft/cloth/markup.ts';
 import type { PickRow } from '#core/craft/cloth/picks.ts';
-import type { Weave } from '#core/craft/cloth/weave.ts';
+import { turnSide, type Weave } from '#core/craft/cloth/weave.ts';
 
 /** Turns finer than this, or more than so many, are drawn as one dashed line for each edge; the others as arcs. */
 const ARCS_FROM = 5;
@@ -28,14 +28,14 @@ interface Turn {
   readonly nextY: number;
 }
 
-/** A turn joins a row and the next one at the right if the row is even, at the left if it is odd. Both must reach that edge. */
+/** A turn joins a row and the one woven after it, at the side the first of the two ends at. Both must reach that edge. */
 function turnsOf(rows: readonly PickRow[], pitch: number, weave: Weave): Turn[] {
   return (['left', 'right'] as const).flatMap((side) => {
     const own = rows.filter((row) => (side === 'left' ? touchesLeft(row) : touchesRight(row, weave)));
     return own.flatMap((row, index): Turn[] => {
       const next = own[index + 1];
-      const turns = row.odd === (side === 'left') && next !== undefined && next.y - row.y <= pitch * 1.5;
-      return turns ? [{ side, y: row.y, nextY: next.y }] : [];
+      if (next === undefined || next.y - row.y > pitch * 1.5) return [];
+      return turnSide(Math.min(row.row, next.row), weave) === side ? [{ side, y: row.y, nextY: next.y }] : [];
     });
   });
 }

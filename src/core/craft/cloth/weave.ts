@@ -1,5 +1,6 @@
 /** What every band needs to know of the drawing it stands in. */
 import type { PathStore } from '#core/craft/cloth/markup.ts';
+import { tabbyFace, wayOfRow } from '#core/craft/interlacement/lay.ts';
 
 export interface Weave {
   readonly id: string;
@@ -14,6 +15,8 @@ export interface Weave {
   readonly minPick: number;
   /** Which end of the screen the first row lies at. From the head, the piece has been turned: left is right. */
   readonly begin: 'head' | 'foot';
+  /** Picks drawn below this band, so that its first one goes on from them: over where the one before went under. */
+  readonly firstRow: number;
   readonly endsTogether: 1 | 2;
   /** Whether yarns show their plies: only near, where `defs` holds the paints for it. */
   readonly plied: boolean;
@@ -28,4 +31,19 @@ export interface Weave {
 /** Rows that can be shown in `height` pixels: all of them, or as many as have `min` pixels each; at least 2. */
 export function drawnRows(rows: number, height: number, min: number): number {
   return Math.max(2, Math.min(Math.round(rows), Math.floor(height / min)));
+}
+
+/** Which row of the cloth the screen's row `index` (from above) of `count` is. */
+export function rowOnScreen(index: number, count: number, { begin, firstRow }: Pick<Weave, 'begin' | 'firstRow'>): number {
+  return firstRow + (begin === 'head' ? index : count - 1 - index);
+}
+
+/** The first drawn end from the left of the screen that a row goes over: 0 or 1. */
+export function firstOver(row: number, { begin, ends }: Pick<Weave, 'begin' | 'ends'>): 0 | 1 {
+  return tabbyFace(begin === 'head' ? ends - 1 : 0, row) === 'front' ? 0 : 1;
+}
+
+/** The edge of the screen a row ends at, where the thread turns into the next one. */
+export function turnSide(row: number, { begin }: Pick<Weave, 'begin'>): 'left' | 'right' {
+  return (wayOfRow(row) === 'right') === (begin === 'foot') ? 'right' : 'left';
 }

@@ -1,13 +1,13 @@
 /** One band of any technique, drawn with its upper edge at y = 0. */
-import { drawHeading } from '#core/craft/cloth/bands/heading.ts';
-import { drawLoopPile } from '#core/craft/cloth/bands/loop-pile.ts';
-import { drawRoving } from '#core/craft/cloth/bands/roving.ts';
-import { drawRya } from '#core/craft/cloth/bands/rya.ts';
+import { drawHeading, headingRows } from '#core/craft/cloth/bands/heading.ts';
+import { drawLoopPile, loopGroundRows } from '#core/craft/cloth/bands/loop-pile.ts';
+import { drawRoving, rovingRows } from '#core/craft/cloth/bands/roving.ts';
+import { drawRya, ryaGroundRows } from '#core/craft/cloth/bands/rya.ts';
 import { drawSoumak } from '#core/craft/cloth/bands/soumak.ts';
 import { drawTabby } from '#core/craft/cloth/bands/tabby.ts';
 import { drawTwining } from '#core/craft/cloth/bands/twining.ts';
 import type { ClothBand, HemStitchBand } from '#core/craft/cloth/cloth-piece.ts';
-import type { Weave } from '#core/craft/cloth/weave.ts';
+import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 /** Hem-stitch is not here: it has no height of its own and is laid on the edge of the cloth afterwards. */
 export type LaidBand = Exclude<ClothBand, HemStitchBand>;
@@ -29,6 +29,25 @@ export function drawBand(band: LaidBand, height: number, weave: Weave): string {
       return drawTwining(band, height, weave);
     case 'heading':
       return drawHeading(band, height, weave);
+  }
+}
+
+/** Picks of tabby drawn in a band: the next one's rows go on from them. */
+export function picksDrawn(band: LaidBand, height: number, weave: Weave): number {
+  switch (band.technique) {
+    case 'tabby':
+      return drawnRows(band.picks, height, weave.minPick);
+    case 'rya':
+      return ryaGroundRows(height, weave);
+    case 'loop-pile':
+      return loopGroundRows(band, height, weave);
+    case 'roving':
+      return rovingRows(band);
+    case 'heading':
+      return headingRows(height, weave);
+    case 'soumak':
+    case 'twining':
+      return 0;
   }
 }
 

@@ -4,8 +4,10 @@ import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { drawPicks, rowsOver } from '#core/craft/cloth/picks.ts';
 import type { Weave } from '#core/craft/cloth/weave.ts';
 
+export const headingRows = (height: number, weave: Pick<Weave, 'minPick'>): number => Math.max(1, Math.floor(height / (weave.minPick * 2.2)));
+
 export function drawHeading(band: HeadingBand, height: number, weave: Weave): string {
-  const count = Math.max(1, Math.floor(height / (weave.minPick * 2.2)));
-  const picks = drawPicks(rowsOver(count, height / count, 0, weave.width), weave.minPick * 0.8, band.colour, 0.5, weave);
+  const count = headingRows(height, weave);
+  const picks = drawPicks(rowsOver(count, height / count, 0, weave), weave.minPick * 0.8, band.colour, 0.5, weave);
   return picks.under + drawEnds(0, height, weave) + picks.over;
 }

@@ -7,8 +7,14 @@ import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 const GROUND_COVER = 0.7;
 
+const loopRows = (band: LoopPileBand, height: number, weave: Pick<Weave, 'minPick'>): number => (band.rows === 1 ? 1 : drawnRows(band.rows, height, weave.minPick * 2.4));
+
+export function loopGroundRows(band: LoopPileBand, height: number, weave: Pick<Weave, 'minPick'>): number {
+  return drawnRows(loopRows(band, height, weave) * 4, height, weave.minPick);
+}
+
 export function drawLoopPile(band: LoopPileBand, height: number, weave: Weave): string {
-  const count = band.rows === 1 ? 1 : drawnRows(band.rows, height, weave.minPick * 2.4);
+  const count = loopRows(band, height, weave);
   const unit = height / count;
   const { end, paths } = weave;
   const width = Math.min(end * 0.62, unit * 0.5);
@@ -16,7 +22,7 @@ export function drawLoopPile(band: LoopPileBand, height: number, weave: Weave): 
   const hang = Math.min(Math.max(unit * 0.75, band.loopMm * weave.pxPerMm), unit * 1.6) * 2;
   let d = '';
   for (let x = 0; x < weave.width - end * 0.5; x += end) d += `M${num(x + end * 0.2)} 0q${num(end * 0.3)} ${num(hang)} ${num(end * 0.6)} 0`;
-  let drawn = drawGround(band.groundColour, drawnRows(count * 4, height, weave.minPick), height, GROUND_COVER, weave);
+  let drawn = drawGround(band.groundColour, loopGroundRows(band, height, weave), height, GROUND_COVER, weave);
   for (let row = count - 1; row >= 0; row--) {
     const at = (off: number): string => ROUND + moved(0, row * unit + unit * 0.16 + off);
     drawn += paths.stroke(d, shade(band.colour, 0.55), width * 1.15, at(width * 0.3));

@@ -24,11 +24,13 @@ export function ryaFall(band: RyaBand, unit: number, weave: Pick<Weave, 'pxPerMm
   return Math.min(Math.max(unit * 1.9, band.pileMm * weave.pxPerMm), weave.longestPile(unit * band.rows));
 }
 
+export const ryaGroundRows = (height: number, weave: Pick<Weave, 'minPick'>): number => drawnRows(Math.max(2, height / weave.minPick), height, weave.minPick);
+
 export function drawRya(band: RyaBand, height: number, weave: Weave): string {
   const rows = Math.max(1, Math.min(band.rows, Math.floor(height / (weave.minPick * 3)) || 1));
   const unit = height / rows;
   const fall = ryaFall(band, height / band.rows, weave);
-  const groundRows = drawnRows(Math.max(2, height / weave.minPick), height, weave.minPick);
+  const groundRows = ryaGroundRows(height, weave);
   const step = knotStep(band, weave);
   const kinds = [pileRow(band, step, fall, weave), pileRow(band, step, fall, weave)];
   let drawn = drawGround(band.groundColour, groundRows, height, GROUND_COVER, weave);

@@ -7,6 +7,7 @@ import { light, shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
 import { drawPicks, plyPaint, rowsOver } from '#core/craft/cloth/picks.ts';
+import { onFace, soumakRow } from '#core/craft/interlacement/lay.ts';
 import type { Weave } from '#core/craft/cloth/weave.ts';
 
 /** Rows thinner than this, in pixels, are gathered: there must be room for shadow, body and light. */
@@ -42,8 +43,8 @@ interface StitchRows {
 }
 
 function stitchRows(band: SoumakBand, thick: number, weave: Weave): StitchRows {
-  const asked = Math.max((weave.end / weave.grouped) * (band.over - band.back), thick * 0.6);
-  const count = Math.max(1, Math.round(weave.width / asked));
+  const row = soumakRow({ first: 0, last: Math.round(weave.ends * weave.grouped) - 1 }, band.over, band.back);
+  const count = Math.max(1, Math.min(onFace(row, 'front').length, Math.round(weave.width / (thick * 0.6))));
   const step = weave.width / count;
   const rise = thick * 0.2;
   let up = '';
@@ -71,6 +72,6 @@ function drawBetween(band: SoumakBand, top: number, height: number, weave: Weave
   if (height < 1.2) return '';
   const count = Math.max(1, Math.min(band.tabbyBetween, Math.floor(height / (weave.minPick * 0.85))));
   const pitch = height / count;
-  const picks = drawPicks(rowsOver(count, pitch, top, weave.width), pitch, band.tabbyColour, 0.7, weave);
+  const picks = drawPicks(rowsOver(count, pitch, top, weave), pitch, band.tabbyColour, 0.7, weave);
   return box(0, top, weave.width, height, shade(band.tabbyColour, 0.6)) + picks.under + drawEnds(top, top + height, weave) + picks.over;
 }

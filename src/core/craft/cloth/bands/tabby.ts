@@ -6,7 +6,7 @@ import { box, num } from '#core/craft/cloth/markup.ts';
 import { spansByRow } from '#core/craft/cloth/spans.ts';
 import { drawPicks, rowsOver, type PickRow } from '#core/craft/cloth/picks.ts';
 import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
-import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
+import { drawnRows, rowOnScreen, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTabby(band: TabbyBand, height: number, weave: Weave): string {
   const count = drawnRows(band.picks, height, weave.minPick);
@@ -19,7 +19,7 @@ export function drawTabby(band: TabbyBand, height: number, weave: Weave): string
 /** Plain tabby in one colour: what stands under shapes and pile alike. */
 export function drawGround(colour: string, count: number, height: number, cover: number, weave: Weave): string {
   const pitch = height / count;
-  const rows = rowsOver(count, pitch, 0, weave.width);
+  const rows = rowsOver(count, pitch, 0, weave);
   const picks = drawPicks(rows, pitch, colour, cover, weave);
   return (
     box(0, 0, weave.width, height, shade(colour, 0.6)) +
@@ -46,7 +46,7 @@ function shapeRows(shape: ClothShape, band: TabbyBand, count: number, pitch: num
       const b = snap(span.to, weave);
       if (b - a < 2 * weave.end) continue;
       const turned = weave.begin === 'head';
-      rows.push({ y: (row + 0.5) * pitch, odd: row % 2 === 1, x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
+      rows.push({ y: (row + 0.5) * pitch, row: rowOnScreen(row, count, weave), x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
     }
   }
   return rows;

@@ -3,6 +3,7 @@ import type { TwiningBand } from '#core/craft/cloth/cloth-piece.ts';
 import { light, shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
+import { onFace, twinedRow } from '#core/craft/interlacement/lay.ts';
 import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTwining(band: TwiningBand, height: number, weave: Weave): string {
@@ -11,7 +12,9 @@ export function drawTwining(band: TwiningBand, height: number, weave: Weave): st
   const rise = pitch * 0.22;
   const { end, paths } = weave;
   let d = '';
-  for (let x = 0; x < weave.width - end * 0.5; x += end) d += `M${num(x + end * 0.1)} ${num(rise)}l${num(end * 0.8)} ${num(-2 * rise)}`;
+  for (const { from } of twinedRow({ first: 0, last: weave.ends - 1 }).flatMap((strand) => onFace(strand, 'front'))) {
+    d += `M${num((from + 0.1) * end)} ${num(rise)}l${num(end * 0.8)} ${num(-2 * rise)}`;
+  }
   let drawn = box(0, 0, weave.width, height, shade(band.colour, 0.6)) + drawEnds(0, height, weave);
   for (let row = 0; row < count; row++) {
     const at = (off: number): string => ROUND + moved(0, (row + 0.5) * pitch + off);
