@@ -44,7 +44,11 @@ export function tautLength(way: readonly Place[], pull: Pull): number {
   return lengthOf(line);
 }
 
-type Point = { x: number; y: number; z: number };
+interface Point {
+  x: number;
+  y: number;
+  z: number;
+}
 
 /** Pulled a little past straight: the line comes to rest in far fewer rounds (successive over-relaxation, Young 1954). */
 const PULL = 1.7;

@@ -25,6 +25,7 @@ export function sceneOf(sources: SceneSources): LessonScene {
   return {
     amounts: amountsOf(sources),
     figures: figuresOf(sources),
+    ...(facts.figures.length > 0 && sources.piece !== undefined && { figuresOf: { piece: sources.piece.piece, plan: sources.piece.plan, units: sources.units } }),
     pictures: entries(namesOf(facts, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
     videos: entries(namesOf(facts, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
     ticked: new Set(ticked),

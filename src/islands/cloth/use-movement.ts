@@ -1,11 +1,12 @@
-/** A movement that plays by itself: how far it is, and the hands on it. */
+/** A movement and the hands on it: it runs to a place and stops there, or is led by hand. */
 import { useEffect, useState } from 'react';
 
 export interface Movement {
   /** 0 before it begins, 1 when it is done. */
   readonly progress: number;
   readonly playing: boolean;
-  readonly play: () => void;
+  /** Runs from `from` (where it is, when missing) to `to`, 1 at the most. */
+  readonly play: (to: number, from?: number) => void;
   readonly stop: () => void;
   /** Goes to a place and stays there. */
   readonly goTo: (progress: number) => void;
@@ -14,32 +15,33 @@ export interface Movement {
 /** @param seconds how long the whole movement takes */
 export function useMovement(seconds: number): Movement {
   const [progress, setProgress] = useState(1);
-  const [playing, setPlaying] = useState(false);
+  /** Where it runs to; none while it stands. */
+  const [to, setTo] = useState<number | null>(null);
   useEffect(() => {
-    if (!playing) return undefined;
+    if (to === null) return undefined;
     let before: number | undefined;
     let frame = requestAnimationFrame(function step(now) {
       const passed = before === undefined ? 0 : (now - before) / 1000 / seconds;
       before = now;
-      setProgress((at) => Math.min(1, at + passed));
+      setProgress((at) => Math.min(to, at + passed));
       frame = requestAnimationFrame(step);
     });
     return () => cancelAnimationFrame(frame);
-  }, [playing, seconds]);
+  }, [to, seconds]);
   useEffect(() => {
-    if (progress >= 1) setPlaying(false);
-  }, [progress]);
+    if (to !== null && progress >= to) setTo(null);
+  }, [progress, to]);
   return {
     progress,
-    playing,
-    play: () => {
-      setProgress((at) => (at >= 1 ? 0 : at));
-      setPlaying(true);
+    playing: to !== null,
+    play: (until, from) => {
+      if (from !== undefined) setProgress(from);
+      setTo(Math.min(1, until));
     },
-    stop: () => setPlaying(false),
-    goTo: (to) => {
-      setPlaying(false);
-      setProgress(to);
+    stop: () => setTo(null),
+    goTo: (place) => {
+      setTo(null);
+      setProgress(place);
     },
   };
 }

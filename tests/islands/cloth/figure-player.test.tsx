@@ -1,10 +1,25 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/react';
-import { afterEach, describe, expect, it } from 'vitest';
+import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
-import { FigurePlayer } from '#islands/cloth/FigurePlayer.tsx';
+import { stepsOf } from '#core/craft/figures/figure-steps.ts';
+import { LiveFigures } from '#islands/cloth/LiveFigures.tsx';
 import { INPUT } from '../../unit/core/craft/figures/figure-input.ts';
 
-afterEach(cleanup);
+let still = false;
+beforeEach(() => {
+  still = false;
+  vi.stubGlobal('matchMedia', () => ({ matches: still, addEventListener: () => undefined, removeEventListener: () => undefined }));
+});
+afterEach(() => {
+  cleanup();
+  document.body.innerHTML = '';
+  vi.unstubAllGlobals();
+});
+
+/** A page as the server drew it: the figures whole, each with its caption. */
+function page(...kinds: readonly string[]): void {
+  document.body.innerHTML = kinds.map((kind) => `<figure data-figure="${kind}"><div data-drawing>${drawFigure('tabby', INPUT)}</div><figcaption>Words.</figcaption></figure>`).join('');
+}
 
 /** The figure as the browser reads its markup. */
 function parsed(svg: string): string {
@@ -13,30 +28,75 @@ function parsed(svg: string): string {
   return box.innerHTML;
 }
 
-const drawing = (): string => screen.getByRole('img').outerHTML;
+const drawing = (): string => document.querySelector('[data-drawing]')?.innerHTML ?? '';
+const at = (progress: number): string => parsed(drawFigure('tabby', INPUT, progress, { id: 'live-0' }));
+const press = (name: string): void => { fireEvent.click(screen.getByRole('button', { name })); };
 
 describe('a technique that moves', () => {
-  it('begins as the finished drawing', () => {
-    render(<FigurePlayer id="a" kind="tabby" input={INPUT} />);
-    expect(drawing()).toBe(parsed(drawFigure('tabby', INPUT, 1, { id: 'a' })));
+  it('stands as the server drew it until somebody asks', () => {
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
+    expect(drawing()).toBe(parsed(drawFigure('tabby', INPUT)));
+    expect(screen.getByText('Words.')).toBeTruthy();
+  });
+
+  it('gives each figure of the page keys of its own, and none to what it does not know', () => {
+    page('tabby', 'tabby', 'no-such-thing');
+    render(<LiveFigures input={INPUT} />);
+    expect(screen.getAllByRole('group', { name: 'Step by step' })).toHaveLength(2);
   });
 
   it('is led by hand to any place', () => {
-    render(<FigurePlayer id="a" kind="tabby" input={INPUT} />);
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
     fireEvent.change(screen.getByRole('slider', { name: 'How far' }), { target: { value: '40' } });
-    expect(drawing()).toBe(parsed(drawFigure('tabby', INPUT, 0.4, { id: 'a' })));
+    expect(drawing()).toBe(at(0.4));
   });
 
-  it('plays from the beginning, and stops when asked', async () => {
-    render(<FigurePlayer id="a" kind="tabby" input={INPUT} />);
-    fireEvent.click(screen.getByRole('button', { name: 'Play it slowly' }));
-    expect(screen.getByRole<HTMLInputElement>('slider').valueAsNumber).toBeLessThan(20);
-    fireEvent.click(await screen.findByRole('button', { name: 'Stop' }));
+  it('plays from the beginning, and pauses when asked', async () => {
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
+    press('Play it slowly');
+    fireEvent.click(await screen.findByRole('button', { name: 'Pause' }));
     expect(screen.getByRole('button', { name: 'Play it slowly' })).toBeTruthy();
+    expect(screen.getByRole<HTMLInputElement>('slider').valueAsNumber).toBeLessThan(60);
   });
 
-  it('takes the words of the teacher, or its own', () => {
-    render(<FigurePlayer id="a" kind="tabby" input={INPUT} caption="Over, under." />);
-    expect(screen.getByText('Over, under.')).toBeTruthy();
+  it('goes on by steps and back again, and says each in words', () => {
+    still = true;
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
+    const steps = stepsOf('tabby', INPUT);
+    press('First step');
+    expect(drawing()).toBe(at(steps[0]?.until ?? 0));
+    expect(screen.getByText(`Step 1 of 5: ${steps[0]?.words ?? ''}`)).toBeTruthy();
+    press('Next step');
+    press('Next step');
+    expect(screen.getByText(/^Step 3 of 5/)).toBeTruthy();
+    press('Step back');
+    expect(drawing()).toBe(at(steps[1]?.until ?? 0));
+    expect(screen.getByText(/^Step 2 of 5/)).toBeTruthy();
+  });
+
+  it('takes arrows while one of its keys has the focus, and keeps them from the page', () => {
+    still = true;
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
+    const heard = vi.fn();
+    document.addEventListener('keydown', heard);
+    fireEvent.keyDown(screen.getByRole('button', { name: 'First step' }), { key: 'ArrowRight' });
+    expect(screen.getByText(/^Step 1 of 5/)).toBeTruthy();
+    fireEvent.keyDown(screen.getByRole('button', { name: 'Next step' }), { key: 'ArrowRight' });
+    fireEvent.keyDown(screen.getByRole('button', { name: 'Next step' }), { key: 'ArrowLeft' });
+    expect(screen.getByText(/^Step 1 of 5/)).toBeTruthy();
+    expect(heard).not.toHaveBeenCalled();
+    document.removeEventListener('keydown', heard);
+  });
+
+  it('shows each step at once, and does not play, for whoever wants less motion', () => {
+    still = true;
+    page('tabby');
+    render(<LiveFigures input={INPUT} />);
+    expect(screen.queryByRole('button', { name: 'Play it slowly' })).toBeNull();
   });
 });

@@ -20,6 +20,14 @@ export const FIGURE_KINDS = [
   'weave-in',
   'measure-wraps',
   'card-width',
+  'basket',
+  'doubled-weft',
+  'loop-pile',
+  'twining',
+  'dovetail',
+  'interlock',
+  'fringe-knot',
+  'twisted-fringe',
 ] as const;
 
 export type FigureKind = (typeof FIGURE_KINDS)[number];

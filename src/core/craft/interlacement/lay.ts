@@ -39,7 +39,10 @@ const reversed = (pass: Pass): Pass => ({ ...pass, from: pass.to, to: pass.from,
 /** Stretches laid to the right, as the hand that goes `way` lays them. */
 const inWay = (passes: readonly Pass[], way: Way): Lay => (way === 'right' ? passes : passes.map(reversed).reverse());
 
-/** Which face a row of tabby lies on at an end. Row 0 is the first one woven and goes over end 0; the one below it, -1, holds the spacer card. */
+/** The spacer card lies below the first row, like one that came before it. */
+export const CARD_ROW = -1;
+
+/** Which face a row of tabby lies on at an end. Row 0 is the first one woven, and goes over end 0. */
 export function tabbyFace(end: number, row: number): Face {
   return (((end + row) % 2) + 2) % 2 === 0 ? 'front' : 'back';
 }

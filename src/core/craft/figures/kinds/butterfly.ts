@@ -19,6 +19,10 @@ export const BUTTERFLY: Figure = {
   height: 250,
   describe: ({ plan }) =>
     `Yarn wound in figures of eight round thumb and little finger, taken off and tied twice round the waist. It is drawn from the end you began with. One weaves about ${countWords(rowsPerLoad(plan.yarns), 'row', 'rows')}.`,
+  steps: () => [
+    { weight: 5, words: 'Lay the end in the palm and wind figures of eight round thumb and little finger.' },
+    { weight: 2, words: 'Take it off and tie the last end twice round the waist. Draw from the end you began with.' },
+  ],
   draw: (scene, input, progress) => {
     const [wind, tie] = stages(progress, [5, 2] as const);
     const colour = techniqueColour(input, 'tabby');

@@ -20,6 +20,11 @@ export const CARD_WIDTH: Figure = {
   height: 266,
   describe: (input) =>
     `Yarn is wound round a card ${lengthWords(cardMm(input), input.units, 'cut')} wide and cut along one edge. Every turn becomes one strand of ${lengthWords(cutMm(input), input.units, 'cut')}.`,
+  steps: (input) => [
+    { weight: 5, words: `Wind round and round a card ${lengthWords(cardMm(input), input.units, 'cut')} wide, side by side.` },
+    { weight: 2, words: 'Cut along one edge, through every turn.' },
+    { weight: 2, words: `Each turn opens to a strand of ${lengthWords(cutMm(input), input.units, 'cut')}.` },
+  ],
   draw: (scene, input, progress) => {
     const [wind, cut, open] = stages(progress, [5, 2, 2] as const);
     const colour = techniqueColour(input, 'rya');

@@ -28,6 +28,7 @@ export const CUTTING_OFF: Figure = {
   height: 290,
   describe: ({ plan }) =>
     `${countWords(plan.ends.nailsBottom, 'loop', 'loops')} hang on the lower nails. Cut the middle one close to its nail, knot its two ends against the cloth, then the next on the left, the next on the right, out to both edges.`,
+  steps: () => ORDER.slice(0, CUT).map((_, place) => ({ weight: 1, words: place === 0 ? 'Cut the loop in the middle close to its nail, and knot its two ends against the cloth.' : `Then the next on the ${place % 2 === 1 ? 'left' : 'right'}: cut it, and knot it before you cut on.` })),
   draw: (scene, input, progress) => {
     const warp = warpColour(input);
     const rows: WarpLines = { x: x(0) - PAIR, step: STEP / 2, count: 13, top: 8, bottom: EDGE_Y };

@@ -9,6 +9,8 @@ import { trail } from '#core/craft/figures/kit/trail.ts';
 import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { countWords } from '#core/craft/figures/length-words.ts';
 import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
+import { repeatWords } from '#core/craft/interlacement/lay-words.ts';
+import { hemStitch } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 70, step: 56, count: 8, top: 8, bottom: 216 };
 const PITCH = 19;
@@ -25,6 +27,7 @@ export const HEM_STITCH: Figure = {
     const { ends, picks } = stitchOf(input);
     return `From right to left: behind ${countWords(ends, 'end', 'ends')}, back over the front of them, behind them again, and up through the cloth ${countWords(picks, 'row', 'rows')} above the edge.`;
   },
+  steps: (input) => [0, 1, 2].map((bundle) => ({ weight: 1, words: bundle === 0 ? `From right to left, round ${countWords(stitchOf(input).ends, 'end', 'ends')}: ${repeatWords(hemStitch({ first: 0, last: stitchOf(input).ends - 1 }))}, and up through the cloth ${countWords(stitchOf(input).picks, 'row', 'rows')} above the edge.` : bundle === 1 ? 'The next bundle in the same three moves.' : 'And so on to the left selvedge.' })),
   draw: (scene, input, progress) => {
     const { picks } = stitchOf(input);
     layWarp(scene, WARP, warpColour(input));

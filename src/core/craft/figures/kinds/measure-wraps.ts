@@ -17,6 +17,7 @@ export const MEASURE_WRAPS: Figure = {
   title: 'Wraps in an inch',
   height: 220,
   describe: () => 'The yarn is wrapped round a rule, side by side, snug and not stretched, for two inches. Half the number of turns is the wraps in an inch.',
+  steps: () => [{ weight: 1, words: 'Wrap the yarn round a rule, side by side, snug and not stretched, over two inches. Count the turns and halve them.' }],
   draw: (scene, input, progress) => {
     const colour = techniqueColour(input, 'tabby');
     scene.add(LEVEL.ground, flat(20, TOP, 520, BOTTOM - TOP, '#efe8d2'));

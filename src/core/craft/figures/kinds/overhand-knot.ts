@@ -18,6 +18,10 @@ export const OVERHAND_KNOT: Figure = {
   title: 'Overhand knot',
   height: 316,
   describe: () => 'Both ends together make a ring; their tips go through it. Before it closes the knot is pushed up against the cloth, and only then drawn tight.',
+  steps: () => [
+    { weight: 4, words: 'Both ends together make a ring, and their tips go through it.' },
+    { weight: 1, words: 'Push the ring up against the cloth, and only then draw it tight.' },
+  ],
   draw: (scene, input, progress) => {
     const [ring, push] = stages(progress, [4, 1] as const);
     const warp = warpColour(input);

@@ -1,13 +1,15 @@
 /** Roving: a very thick weft that goes over and under several ends at once and is puffed up where it lies in front. */
 import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { levelOf } from '#core/craft/figures/kit/lay-runs.ts';
 import { measureBeside, words } from '#core/craft/figures/kit/marks.ts';
 import { layField } from '#core/craft/figures/kit/rows.ts';
-import { LEVEL } from '#core/craft/figures/kit/scene.ts';
 import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
 import { trail } from '#core/craft/figures/kit/trail.ts';
 import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
+import { repeatWords } from '#core/craft/interlacement/lay-words.ts';
+import { rovingRow } from '#core/craft/interlacement/lay.ts';
 
 /** Twelve ends divide by every number of ends that is shown. */
 const WARP: WarpLines = { x: 66, step: 39, count: 12, top: 8, bottom: 238 };
@@ -21,6 +23,7 @@ export const ROVING: Figure = {
     const { over, bulgeMm } = rovingOf(input);
     return `Unspun roving goes over ${countWords(over, 'end', 'ends')} and under ${over}, without pulling, and is puffed up to about ${lengthWords(bulgeMm, input.units, 'fine')} where it lies in front.`;
   },
+  steps: (input) => [{ weight: 1, words: `Without pulling, ${repeatWords(rovingRow({ first: 0, last: WARP.count - 1 }, rovingOf(input).over))}; puff it up where it lies in front.` }],
   draw: (scene, input, progress) => {
     const { over, bulgeMm } = rovingOf(input);
     layWarp(scene, WARP, warpColour(input));
@@ -40,15 +43,11 @@ function rovingOf(input: FigureInput): { over: number; bulgeMm: number } {
 }
 
 function rovingRuns(over: number): Run[] {
-  const runs: Run[] = [];
-  for (let start = 0, front = true; start < WARP.count; start += over, front = !front) {
-    const last = Math.min(WARP.count, start + over);
-    const a = endX(WARP, start) - WARP.step / 2;
-    const b = endX(WARP, last - 1) + WARP.step / 2;
-    const lift = front ? 38 : 0;
-    runs.push({ level: front ? LEVEL.front : LEVEL.behind, points: bulge(a, b, lift) });
-  }
-  return runs;
+  return rovingRow({ first: 0, last: WARP.count - 1 }, over).map((pass): Run => {
+    const a = endX(WARP, pass.from) - WARP.step / 2;
+    const b = endX(WARP, pass.to) + WARP.step / 2;
+    return { level: levelOf(pass.face), points: bulge(a, b, pass.raised === 'puff' ? 38 : 0) };
+  });
 }
 
 /** Level at both ends, so that it goes on smoothly behind the next ends. */

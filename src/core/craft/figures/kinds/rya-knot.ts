@@ -28,6 +28,12 @@ export const RYA_KNOT: Figure = {
     const long = cut === undefined ? '' : `, each ${lengthWords(cut, input.units, 'cut')} long`;
     return `A bundle of ${strands}${long} is laid over two ends. Each half goes round the outside of its end, behind it, and up between the two. Both are drawn down until the knot sits on the cloth.`;
   },
+  steps: () => [
+    { weight: 2, words: 'Lay the bundle over two ends, both halves alike long.' },
+    { weight: 3, words: 'Take the left half round the outside of its end, behind it, and up between the two.' },
+    { weight: 3, words: 'Do the same with the right half. The bridge lies in front.' },
+    { weight: 3, words: 'Draw both halves down until the knot sits on the cloth.' },
+  ],
   draw: (scene, input, progress) => {
     const [laid, left, right, down] = stages(progress, [2, 3, 3, 3] as const);
     const foam = techniqueColour(input, 'rya');

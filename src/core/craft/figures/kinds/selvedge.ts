@@ -18,6 +18,7 @@ export const SELVEDGE: Figure = {
   height: 270,
   describe: () =>
     'On the left a turn that touches the last end: the edge stays straight. On the right a tight turn: it draws the last end in, row by row, until the cloth has a waist.',
+  steps: () => [{ weight: 1, words: 'On the left each turn touches the last end; on the right each turn is tight, and draws the edge in row by row.' }],
   draw: (scene, input, progress) => {
     const weft = techniqueColour(input, 'tabby');
     const warp = warpColour(input);

@@ -19,6 +19,10 @@ export const SHED_STICK: Figure = {
   height: 250,
   describe: () =>
     'Seen from the side. Flat, the stick lies in the warp. Turned on its edge it lifts every second end; the gap in front of it is the shed, and the weft goes through it in one movement.',
+  steps: () => [
+    { weight: 3, words: 'Turn the stick on its edge: every second end lifts.' },
+    { weight: 2, words: 'Pass the weft through the open shed.' },
+  ],
   draw: (scene, input, progress) => {
     const [turn, pass] = stages(progress, [3, 2] as const);
     const open = eased(turn);

@@ -19,6 +19,7 @@ export const SLIT: Figure = {
   height: 262,
   describe: ({ units }) =>
     `Two colours turn on neighbouring ends, and a slit stays open between them. One longer than ${lengthWords(SEW_FROM_MM, units, 'fine')} is sewn from the back.`,
+  steps: () => [{ weight: 1, words: 'Each colour turns on its own last end, row after row. The gap between them stays open.' }],
   draw: (scene, input, progress) => {
     const { ground, first } = shapeColours(input);
     layWarp(scene, WARP, warpColour(input));

@@ -1,6 +1,7 @@
 /** Soumak: forward over some ends, back under fewer, each stitch leaning like the one before; the row back leans the other way. */
 import { shade } from '#core/craft/cloth/colour.ts';
 import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { layRuns } from '#core/craft/figures/kit/lay-runs.ts';
 import { measure, words } from '#core/craft/figures/kit/marks.ts';
 import { layField } from '#core/craft/figures/kit/rows.ts';
 import { LEVEL } from '#core/craft/figures/kit/scene.ts';
@@ -10,6 +11,8 @@ import { trail } from '#core/craft/figures/kit/trail.ts';
 import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { countWords } from '#core/craft/figures/length-words.ts';
 import { bandOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
+import { repeatWords } from '#core/craft/interlacement/lay-words.ts';
+import { soumakRow } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 52, step: 38, count: 13, top: 8, bottom: 262 };
 const FIRST_ROW = 170;
@@ -24,12 +27,19 @@ export const SOUMAK: Figure = {
     const { over, back } = stitchOf(input);
     return `The yarn goes forward over ${countWords(over, 'end', 'ends')} and back under ${back}, and comes out above itself. Each stitch leans like the one before it. On the way back the stitches lean the other way, and two rows make a plait.`;
   },
+  steps: (input) => {
+    const { over, back } = stitchOf(input);
+    return [
+      { weight: 2, words: `To the right: ${repeatWords(soumakRow(endsOf(over, back), over, back))}, and out above the thread.` },
+      { weight: 1, words: `Back to the left in the same stitch, ${repeatWords(soumakRow(endsOf(over, back), over, back, 'left'))}. It leans the other way.` },
+    ];
+  },
   draw: (scene, input, progress) => {
     const { over, back } = stitchOf(input);
     layWarp(scene, WARP, warpColour(input));
     layField(scene, WARP, { colour: roleColour(input, bandOf(input, 'soumak')?.tabbyYarn, '#93a8a6'), width: 12.5, bottom: 246, pitch: 17, rows: 4, first: 0, last: 12, out: 18 });
     const colour = techniqueColour(input, 'soumak');
-    const runs = [...rowRight(over, back), ...rowLeft(over, back)].map((run) => (run.level === LEVEL.behind ? { ...run, colour: shade(colour, 0.45) } : run));
+    const runs = plaitRuns(over, back).map((run) => (run.level === LEVEL.behind ? { ...run, colour: shade(colour, 0.45) } : run));
     const tip = layStrand(scene, { colour, width: 14, runs }, progress);
     if (progress < 1) needleAt(scene, tip);
     if (progress < 1) return;
@@ -44,33 +54,20 @@ function stitchOf(input: FigureInput): { over: number; back: number } {
   return { over: Math.min(6, band?.over ?? 4), back: Math.min(5, band?.back ?? 2) };
 }
 
-function rowRight(over: number, back: number): Run[] {
-  const runs: Run[] = [];
-  let start = 0;
-  while (start + over <= WARP.count) {
-    const a = endX(WARP, start) - WARP.step / 2;
-    const b = endX(WARP, start + over - 1) + WARP.step / 2;
-    runs.push({ level: LEVEL.front, points: trail(a, FIRST_ROW - LEAN).to(b, FIRST_ROW + LEAN).points });
-    start += over - back;
-    const c = endX(WARP, start) - WARP.step / 2;
-    runs.push({ level: LEVEL.behind, points: trail(b, FIRST_ROW + LEAN).curve(b + 14, FIRST_ROW + LEAN, b + 10, FIRST_ROW - LEAN, b - 4, FIRST_ROW - LEAN).to(c, FIRST_ROW - LEAN).points });
-  }
-  return runs;
+/** As many ends as whole stitches take. */
+function endsOf(over: number, back: number): { first: number; last: number } {
+  const step = over - back;
+  return { first: 0, last: over - 1 + step * Math.floor((WARP.count - over) / step) };
 }
 
 /** Two thirds of the row back: enough to see that it leans the other way. */
-function rowLeft(over: number, back: number): Run[] {
-  const runs: Run[] = [];
-  let start = WARP.count - 1;
-  const last = WARP.count - 1;
-  runs.push({ level: LEVEL.behind, points: trail(endX(WARP, last) + 8, FIRST_ROW - LEAN).curve(endX(WARP, last) + 30, FIRST_ROW - 14, endX(WARP, last) + 30, SECOND_ROW - LEAN, endX(WARP, last) + WARP.step / 2, SECOND_ROW - LEAN).points });
-  for (let stitch = 0; stitch < 3 && start - over >= -1; stitch++) {
-    const a = endX(WARP, start) + WARP.step / 2;
-    const b = endX(WARP, start - over + 1) - WARP.step / 2;
-    runs.push({ level: LEVEL.front, points: trail(a, SECOND_ROW - LEAN).to(b, SECOND_ROW + LEAN).points });
-    start -= over - back;
-    const c = endX(WARP, start) + WARP.step / 2;
-    runs.push({ level: LEVEL.behind, points: trail(b, SECOND_ROW + LEAN).curve(b - 14, SECOND_ROW + LEAN, b - 10, SECOND_ROW - LEAN, b + 4, SECOND_ROW - LEAN).to(c, SECOND_ROW - LEAN).points });
-  }
-  return runs;
+const STITCHES_BACK = 3;
+
+function plaitRuns(over: number, back: number): Run[] {
+  const ends = endsOf(over, back);
+  const right = layRuns(WARP, { lay: soumakRow(ends, over, back), y: FIRST_ROW, lean: LEAN, out: WARP.step / 2 });
+  const left = layRuns(WARP, { lay: soumakRow(ends, over, back, 'left').slice(0, 2 * STITCHES_BACK), y: SECOND_ROW, lean: LEAN, out: WARP.step / 2 });
+  const edge = endX(WARP, ends.last);
+  const up = trail(edge + 8, FIRST_ROW - LEAN).curve(edge + 30, FIRST_ROW - 14, edge + 30, SECOND_ROW - LEAN, edge + WARP.step / 2, SECOND_ROW - LEAN).points;
+  return [...right, { level: LEVEL.behind, points: up }, ...left];
 }

@@ -1,14 +1,16 @@
 /** The spacer card: woven in like a broad row, pushed down to the nails, with the spacing row twined along its upper edge. */
 import { num } from '#core/craft/cloth/markup.ts';
 import type { Figure } from '#core/craft/figures/figure.ts';
+import { twinedRuns } from '#core/craft/figures/kit/lay-runs.ts';
 import { handWay, measure, nail, wood, words } from '#core/craft/figures/kit/marks.ts';
 import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
 import { eased, stages } from '#core/craft/figures/kit/stages.ts';
-import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
+import { layStrand } from '#core/craft/figures/kit/strand.ts';
 import { CARD, flat } from '#core/craft/figures/kit/tools.ts';
 import { trail } from '#core/craft/figures/kit/trail.ts';
 import { endX, layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { lengthWords } from '#core/craft/figures/length-words.ts';
+import { CARD_ROW, onFace, tabbyRow } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 120, step: 40, count: 9, top: 10, bottom: 240 };
 const CARD_HEIGHT = 76;
@@ -22,6 +24,11 @@ export const SPACER_CARD: Figure = {
   height: 300,
   describe: ({ plan, units }) =>
     `A card ${lengthWords(plan.cut.spacerCard.widthMm, units, 'least')} long and ${lengthWords(plan.cut.spacerCard.heightMm, units, 'least')} high goes over one end and under the next, down to the lower nails. A twined row on its upper edge holds the ends evenly apart.`,
+  steps: () => [
+    { weight: 3, words: 'Slide the card in, over one end and under the next.' },
+    { weight: 2, words: 'Push it down to the lower nails. The first row of cloth will go the other way about.' },
+    { weight: 4, words: 'Twine one row along its upper edge: it holds the ends evenly apart.' },
+  ],
   draw: (scene, input, progress) => {
     const [slide, push, twine] = stages(progress, [3, 2, 4] as const);
     const { spacerCard } = input.plan.cut;
@@ -42,8 +49,9 @@ export const SPACER_CARD: Figure = {
 
 function layCard(scene: Scene, x: number, y: number): void {
   scene.add(LEVEL.behind, flat(x, y, WIDTH, CARD_HEIGHT, CARD));
-  for (let i = 0; i < WARP.count; i += 2) {
-    const at = endX(WARP, i);
+  /* The card is the row below the first: it lies on the other face at every end. */
+  for (const { from } of onFace(tabbyRow({ first: 0, last: WARP.count - 1 }, CARD_ROW), 'front')) {
+    const at = endX(WARP, from);
     if (at < x + 6 || at > x + WIDTH - 6) continue;
     scene.add(LEVEL.front, `<path d="M${num(at - 9)} ${num(y + 0.8)}h18v${num(CARD_HEIGHT - 1.6)}h-18z" fill="${CARD}"/><path class="draw-edge" d="M${num(at - 9)} ${num(y)}h18M${num(at - 9)} ${num(y + CARD_HEIGHT)}h18" stroke="#111e33" stroke-width="1.6"/>`);
   }
@@ -52,14 +60,5 @@ function layCard(scene: Scene, x: number, y: number): void {
 /** Two strands that cross between every two ends: each is in front where the other is behind. */
 function layTwining(scene: Scene, colour: string, share: number): void {
   const y = LOW - 7;
-  for (const odd of [0, 1]) {
-    const runs: Run[] = [];
-    for (let i = 0; i < WARP.count; i++) {
-      const inFront = i % 2 === odd;
-      const x = endX(WARP, i);
-      const [a, b] = inFront ? [y + 3, y - 3] : [y - 3, y + 3];
-      runs.push({ level: inFront ? LEVEL.front + 1 : LEVEL.behind + 1, points: trail(x - 20, a).bend(x, inFront ? y + 1 : y - 1, x + 20, b).points });
-    }
-    layStrand(scene, { colour, width: 4.4, runs }, share);
-  }
+  for (const runs of twinedRuns(WARP, y, 3)) layStrand(scene, { colour, width: 4.4, runs: runs.map((run) => ({ ...run, level: run.level + 1 })) }, share);
 }

@@ -28,6 +28,7 @@ export const WARPING: Figure = {
     const { count, nailsTop, nailsBottom } = input.plan.ends;
     return `The warp runs ${way}, until ${countWords(count, 'end', 'ends')} stand on ${countWords(nailsTop, 'nail', 'nails')} above and ${nailsBottom} below, ${lengthWords(pitchMm(input), input.units, 'fine')} from nail to nail.`;
   },
+  steps: (input) => [{ weight: 1, words: input.piece.loom.warping === 'zigzag' ? 'Tie to the first nail. Down round the nail below, up round the next one above, and so on.' : 'Tie to the first nail. Across to the other rail, along to the neighbouring nail, and back.' }],
   draw: (scene, input, progress) => {
     const colour = warpColour(input);
     const zigzag = input.piece.loom.warping === 'zigzag';

@@ -21,6 +21,10 @@ export const WEAVE_IN: Figure = {
   title: 'Running in a tail',
   height: 268,
   describe: () => 'Seen from the back. The needle runs the tail up beside one end, under four rows, and comes out; the tail is cut off there.',
+  steps: () => [
+    { weight: 4, words: 'At the back, run the tail up beside one end, under four rows, and out.' },
+    { weight: 1, words: 'Cut it off there.' },
+  ],
   draw: (scene, input, progress) => {
     const { ground, first } = shapeColours(input);
     const [run, cut] = stages(progress, [4, 1] as const);

@@ -1,13 +1,15 @@
 /** Wedges: what narrows as it rises is woven first; what widens fills the valley afterwards. */
 import type { Figure } from '#core/craft/figures/figure.ts';
+import type { LaidRow } from '#core/craft/figures/kit/lay-runs.ts';
 import { numeral, words } from '#core/craft/figures/kit/marks.ts';
 import { rowRuns } from '#core/craft/figures/kit/rows.ts';
 import type { Scene } from '#core/craft/figures/kit/scene.ts';
 import { stages } from '#core/craft/figures/kit/stages.ts';
 import { layStrand } from '#core/craft/figures/kit/strand.ts';
 import { needleAt } from '#core/craft/figures/kit/tools.ts';
-import { layWarp, warpColour, type Pick, type WarpLines } from '#core/craft/figures/kit/warp.ts';
+import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { shapeColours } from '#core/craft/figures/yarns.ts';
+import { tabbyRow } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 54, step: 37.5, count: 13, top: 8, bottom: 262 };
 const PITCH = 16.5;
@@ -21,6 +23,11 @@ export const WEDGE: Figure = {
   height: 272,
   describe: () =>
     'A dune is woven first, by itself. Every few rows it gives up one end, first at one side and then at the other, so its edges climb like stairs. The valleys beside it are filled afterwards.',
+  steps: () => [
+    { weight: 5, words: 'Weave the dune by itself. Every few rows turn one end earlier, first at one side, then at the other.' },
+    { weight: 3, words: 'Fill the valley at its right.' },
+    { weight: 2, words: 'Fill the valley at its left, up to the same height.' },
+  ],
   draw: (scene, input, progress) => {
     const { ground, first } = shapeColours(input);
     const [dune, right, left] = stages(progress, [5, 3, 2] as const);
@@ -36,10 +43,8 @@ export const WEDGE: Figure = {
 };
 
 function layPart(scene: Scene, colour: string, spans: readonly (readonly [number, number])[], share: number): void {
-  const picks = spans.flatMap(([from, to], pass): Pick[] => [
-    { y: BOTTOM - 2 * pass * PITCH, from, to, overEven: true, out: 5 },
-    { y: BOTTOM - (2 * pass + 1) * PITCH, from: to, to: from, overEven: false, out: 5 },
-  ]);
+  const picks = spans.flatMap(([first, last], pass) =>
+    [2 * pass, 2 * pass + 1].map((row): LaidRow => ({ lay: tabbyRow({ first, last }, row), y: BOTTOM - row * PITCH, out: 5 })));
   const tip = layStrand(scene, { colour, width: 12, runs: rowRuns(WARP, picks) }, share);
   if (share > 0 && share < 1) needleAt(scene, tip);
 }

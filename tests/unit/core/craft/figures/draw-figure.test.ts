@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import { FIGURE_KINDS, isFigureKind } from '#core/craft/figures/figure-kinds.ts';
+import { stepAt, stepsOf } from '#core/craft/figures/figure-steps.ts';
 import { FIGURES } from '#core/craft/figures/figures.ts';
 import { INPUT, PIECE } from './figure-input.ts';
 
@@ -17,6 +18,22 @@ describe.each(FIGURE_KINDS)('the figure "%s"', (kind) => {
 
   it('grows: the end shows more than the beginning', () => {
     expect(drawFigure(kind, INPUT, 1).length).toBeGreaterThan(drawFigure(kind, INPUT, 0).length);
+  });
+
+  it('is told in steps that follow each other to its end, each with words and a drawing of its own', () => {
+    const steps = stepsOf(kind, INPUT);
+    expect(steps.at(-1)?.until).toBe(1);
+    let before = 0;
+    let drawn = drawFigure(kind, INPUT, 0);
+    steps.forEach(({ words, until }, index) => {
+      expect(words).toMatch(/^[A-Z][^]*\.$/u);
+      expect(until).toBeGreaterThan(before);
+      const now = drawFigure(kind, INPUT, until);
+      expect(now).not.toBe(drawn);
+      expect(stepAt(steps, until)).toBe(index);
+      expect(stepAt(steps, (before + until) / 2)).toBe(index);
+      [before, drawn] = [until, now];
+    });
   });
 
   it('is the same every time', () => {
