@@ -115,7 +115,7 @@ describe('parts', () => {
 
   test('a figure is the drawing from the scene, under it the caption as text', async () => {
     const page = await draw('<Figure of="tabby" caption="a &lt;b&gt; c"/>', { figures: { tabby: { svg: '<svg role="img" aria-label="Tabby"></svg>' } } });
-    expect(page.querySelector('figure > svg')?.getAttribute('aria-label')).toBe('Tabby');
+    expect(page.querySelector('figure > [data-drawing] > svg')?.getAttribute('aria-label')).toBe('Tabby');
     expect(page.querySelector('figcaption')?.innerHTML).toBe('a &lt;b&gt; c');
   });
 

@@ -10,19 +10,21 @@ import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/war
 import { lengthWords } from '#core/craft/figures/length-words.ts';
 import { techniqueColour } from '#core/craft/figures/yarns.ts';
 import { repeatWords } from '#core/craft/interlacement/lay-words.ts';
-import { basketRow } from '#core/craft/interlacement/lay.ts';
+import { basketRow, type Lay } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 64, step: 48, count: 10, top: 12, bottom: 206 };
+
+const rowAt = (row: number): Lay => basketRow({ first: 0, last: 9 }, row, 2, row % 2 === 0 ? 'left' : 'right');
 
 export const DOUBLED_ENDS: Figure = {
   title: 'Doubled ends',
   height: 270,
   describe: (input) =>
     `Two neighbouring ends count as one: the weft goes over two and under two. From one pair to the next is ${lengthWords(pairMm(input), input.units, 'fine')}.`,
-  steps: () => [0, 1, 2].map((row) => ({ weight: 1, words: `${row === 0 ? 'Two neighbours are taken up as one' : row === 1 ? 'The next row does the opposite' : 'And so on'}: ${repeatWords(basketRow({ first: 0, last: 9 }, row, 2, row % 2 === 0 ? 'left' : 'right'))}.` })),
+  steps: () => ['Two neighbours are taken up as one', 'The next row does the opposite', 'And so on'].map((words, row) => ({ weight: 1, words: `${words}: ${repeatWords(rowAt(row))}.` })),
   draw: (scene, input, progress) => {
     layWarp(scene, WARP, warpColour(input));
-    const rows = rowRuns(WARP, [0, 1, 2].map((row) => ({ lay: basketRow({ first: 0, last: 9 }, row, 2, row % 2 === 0 ? 'left' : 'right'), y: 150 - 32 * row, out: 16 })));
+    const rows = rowRuns(WARP, [0, 1, 2].map((row) => ({ lay: rowAt(row), y: 150 - 32 * row, out: 16 })));
     const tip = layStrand(scene, { colour: techniqueColour(input, 'tabby'), width: 13, runs: rows }, progress);
     if (progress < 1) needleAt(scene, tip);
     for (let pair = 0; pair < 5; pair++) {

@@ -1,5 +1,6 @@
 /** Hem-stitch along the lower edge, from right to left: behind a bundle, round it, behind it again and up through the cloth. */
 import type { Figure, FigureInput } from '#core/craft/figures/figure.ts';
+import { levelOf } from '#core/craft/figures/kit/lay-runs.ts';
 import { numeral, words } from '#core/craft/figures/kit/marks.ts';
 import { layField } from '#core/craft/figures/kit/rows.ts';
 import { LEVEL } from '#core/craft/figures/kit/scene.ts';
@@ -27,7 +28,7 @@ export const HEM_STITCH: Figure = {
     const { ends, picks } = stitchOf(input);
     return `From right to left: behind ${countWords(ends, 'end', 'ends')}, back over the front of them, behind them again, and up through the cloth ${countWords(picks, 'row', 'rows')} above the edge.`;
   },
-  steps: (input) => [0, 1, 2].map((bundle) => ({ weight: 1, words: bundle === 0 ? `From right to left, round ${countWords(stitchOf(input).ends, 'end', 'ends')}: ${repeatWords(hemStitch({ first: 0, last: stitchOf(input).ends - 1 }))}, and up through the cloth ${countWords(stitchOf(input).picks, 'row', 'rows')} above the edge.` : bundle === 1 ? 'The next bundle in the same three moves.' : 'And so on to the left selvedge.' })),
+  steps: (input) => [firstMoves(input), 'The next bundle in the same three moves.', 'And so on to the left selvedge.'].map((words) => ({ words, weight: 1 })),
   draw: (scene, input, progress) => {
     const { picks } = stitchOf(input);
     layWarp(scene, WARP, warpColour(input));
@@ -50,19 +51,29 @@ function stitchOf(input: FigureInput): { ends: number; picks: number } {
   return { ends: band?.bundleEnds ?? 2, picks: band?.reachPicks ?? 2 };
 }
 
+function firstMoves(input: FigureInput): string {
+  const { ends, picks } = stitchOf(input);
+  const moves = repeatWords(hemStitch({ first: 0, last: ends - 1 }));
+  return `From right to left, round ${countWords(ends, 'end', 'ends')}: ${moves}, and up through the cloth ${countWords(picks, 'row', 'rows')} above the edge.`;
+}
+
 /** The first tabby the edge belongs to. */
 function groundRole(input: FigureInput): string | undefined {
   return bandOf(input, 'tabby')?.yarn;
 }
 
+/** Where the three moves of a stitch lie. */
+const FACES = hemStitch({ first: 0, last: 1 }).map(({ face }) => levelOf(face)) as [number, number, number];
+
 /** @param up where the thread comes out of the cloth */
 function bundleRuns(right: number, left: number, up: number): Run[] {
   const before = right + 26;
   const after = left - 26;
+  const [behind, round, again] = FACES;
   return [
-    { level: LEVEL.behind, points: trail(before, STITCH_Y - 6).to(after + 6, STITCH_Y - 6).points },
-    { level: LEVEL.front, points: trail(after + 6, STITCH_Y - 6).bend(after - 8, STITCH_Y + 2, after + 6, STITCH_Y + 10).to(right + 14, STITCH_Y + 10).points },
-    { level: LEVEL.behind, points: trail(right + 14, STITCH_Y + 10).bend(right + 26, STITCH_Y + 3, right + 8, STITCH_Y + 1).to(after + 12, STITCH_Y - 10).bend(after, STITCH_Y - 14, after, STITCH_Y - 34).to(after, up).points },
+    { level: behind, points: trail(before, STITCH_Y - 6).to(after + 6, STITCH_Y - 6).points },
+    { level: round, points: trail(after + 6, STITCH_Y - 6).bend(after - 8, STITCH_Y + 2, after + 6, STITCH_Y + 10).to(right + 14, STITCH_Y + 10).points },
+    { level: again, points: trail(right + 14, STITCH_Y + 10).bend(right + 26, STITCH_Y + 3, right + 8, STITCH_Y + 1).to(after + 12, STITCH_Y - 10).bend(after, STITCH_Y - 14, after, STITCH_Y - 34).to(after, up).points },
     { level: LEVEL.above, points: trail(after, up).bend(after - 12, up + 8, after - 6, up + 26).to(after - 2, STITCH_Y - 22).bend(after, STITCH_Y - 8, after - 4, STITCH_Y - 6).points },
   ];
 }

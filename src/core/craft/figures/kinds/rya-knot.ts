@@ -1,6 +1,7 @@
 /** The rya knot: laid over two ends, each half round the outside and up between them, then both drawn down. */
 import { shade } from '#core/craft/cloth/colour.ts';
 import type { Figure } from '#core/craft/figures/figure.ts';
+import { levelOf } from '#core/craft/figures/kit/lay-runs.ts';
 import { handWay, words } from '#core/craft/figures/kit/marks.ts';
 import { layField } from '#core/craft/figures/kit/rows.ts';
 import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
@@ -10,6 +11,7 @@ import { trail } from '#core/craft/figures/kit/trail.ts';
 import { layWarp, warpColour, type WarpLines } from '#core/craft/figures/kit/warp.ts';
 import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 import { bandOf, bandPlanOf, roleColour, techniqueColour } from '#core/craft/figures/yarns.ts';
+import { ryaKnot } from '#core/craft/interlacement/lay.ts';
 
 const WARP: WarpLines = { x: 82, step: 66, count: 7, top: 8, bottom: 306 };
 const FELL = 232;
@@ -63,13 +65,18 @@ function layKnot(scene: Scene, colour: string, middle: number, y: number, left: 
   lay(scene, colour, edge, parts, 1);
 }
 
+/** Behind the left end, in front of both, behind the right one: where each part of the knot lies. */
+const FACES = ryaKnot(0, 1).map(({ face }) => levelOf(face)) as [number, number, number];
+
 /** One half of the bundle: from the bridge out, behind the end, up through the middle and down over the cloth. */
 function halfRuns(middle: number, y: number, side: -1 | 1): Run[] {
+  const [left, bridge, right] = FACES;
+  const leg = side < 0 ? left : right;
   const end = middle + (side * WARP.step) / 2;
   const tail = middle + side * 11;
   return [
-    { level: LEVEL.front, points: trail(end + side * 10, y).bend(end + side * 30, y, end + side * 30, y + 12).points },
-    { level: LEVEL.behind, points: trail(end + side * 30, y + 12).bend(end + side * 30, y + 24, end + side * 6, y + 22).to(middle + side * 15, y + 20).points },
+    { level: bridge, points: trail(end + side * 10, y).bend(end + side * 30, y, end + side * 30, y + 12).points },
+    { level: leg, points: trail(end + side * 30, y + 12).bend(end + side * 30, y + 24, end + side * 6, y + 22).to(middle + side * 15, y + 20).points },
     { level: LEVEL.above, points: trail(middle + side * 15, y + 20).bend(tail, y + 20, tail, y + 44).to(tail + side * 3, y + 98).points },
   ];
 }
