@@ -43,10 +43,12 @@ const BANDS: Readonly<Record<string, Schema>> = {
     'tabby',
     {
       heightMm: number('Height of the band, mm.', { min: 0, max: LONGEST_MM }),
+      strands: whole('Strands in a row, instead of the yarn’s own number; 2 is doubled weft.', { min: 1, max: 100 }),
+      basket: flag('Two ends as one, and two strands in a row unless `strands` says otherwise. Needs an even number of working ends.'),
       fill: { const: true, description: 'The band takes what height is left; one in a piece.' },
       shapes: list('Shapes woven into the ground.', ref('Shape'), { maxItems: 24 }),
     },
-    ['heightMm', 'fill', 'shapes'],
+    ['strands', 'basket', 'heightMm', 'fill', 'shapes'],
     exactlyOne(['heightMm'], ['fill']),
   ),
   SoumakBand: band('Weft wrapped round the ends, over some and back under fewer.', 'soumak', {
@@ -57,13 +59,14 @@ const BANDS: Readonly<Record<string, Schema>> = {
     tabbyYarn: role('Yarn role of the tabby between.'),
   }),
   RyaBand: band('Cut strands knotted round two legs of ends.', 'rya', {
+    edgeEnds: whole('Plain ends at each selvedge; 0 when missing.', { min: 0, max: 100 }),
     strands: whole('Strands in a knot.', { min: 1, max: 100 }),
     legEnds: whole('Ends in each leg.', { min: 1, max: 100 }),
     pileMm: lengthMm('How far the pile hangs, mm.'),
     trimMm: number('To be trimmed away, mm.', { min: 0, max: 1000 }),
     rows,
     heightMm: bandHeight,
-  }),
+  }, ['edgeEnds']),
   RovingBand: band(
     'Unspun fibre laid over and under groups of ends, puffed up on the face.',
     'roving',
@@ -86,7 +89,7 @@ const BANDS: Readonly<Record<string, Schema>> = {
     ['rodMm', 'loopMm'],
     exactlyOne(['rodMm'], ['loopMm']),
   ),
-  TwiningBand: band('Two wefts crossing between every two ends.', 'twining', { rows }),
+  TwiningBand: band('Two wefts crossing between the ends.', 'twining', { rows, endsPerTwist: whole('Ends between two crossings; 1 when missing.', { min: 1, max: 100 }) }, ['endsPerTwist']),
 };
 
 const BAND_OF: Readonly<Record<string, string>> = {
@@ -147,6 +150,23 @@ const Warp = closed(
   ['endsTogether', 'parity', 'endCount', 'tieMm'],
 );
 
+const Finish = closed(
+  'What becomes of the warp ends below the cloth.',
+  {
+    bottom: choice('`plain` leaves or cuts them as they are.', 'knotted', 'twisted', 'tucked', 'plain'),
+    fringeMm: number('Fringe left to see; none when missing. Ends that are tucked in leave none.', { min: 0, max: 2000 }),
+    bundleEnds: whole('Ends in a knot or a twisted cord; 4 when missing.', { min: 1, max: 100 }),
+  },
+  ['fringeMm', 'bundleEnds'],
+  {
+    oneOf: [
+      { properties: { bottom: { enum: ['knotted', 'twisted'] } } },
+      { properties: { bottom: { const: 'tucked' }, fringeMm: false, bundleEnds: false } },
+      { properties: { bottom: { const: 'plain' }, bundleEnds: false } },
+    ],
+  },
+);
+
 const ALLOWANCES: Readonly<Record<string, Schema>> = {
   drawIn: number('Share by which the cloth draws in; 0.02, in balanced cloth 0.08.', { min: 0, below: 0.4 }),
   relaxation: number('Share by which it shortens when cut off; 0.02.', { min: 0, max: 0.2 }),
@@ -168,6 +188,7 @@ export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
   Shape,
   ShapePoint,
   Loom,
+  Finish,
   Warp,
   Piece: closed(
     'A piece, in millimetres. Shares are fractions: 0.02 is two per cent.',
@@ -184,7 +205,8 @@ export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
       ),
       mode: choice('Which yarn bends; `straight-warp` when missing.', 'straight-warp', 'balanced'),
       allowances: closed('Each with its default.', ALLOWANCES, Object.keys(ALLOWANCES)),
-      dowel: closed('The rod it hangs from.', { diameterMm: lengthMm('Thickness.', 200), lengthMm: number('Length; the width and 40 mm on each side when missing.', { min: 60, max: LONGEST_MM }) }, ['lengthMm']),
+      dowel: closed('The rod it hangs from.', { fixing: choice('How the cloth is held to it; `slipped` when missing.', 'slipped', 'tied', 'lashed'), diameterMm: lengthMm('Thickness.', 200), lengthMm: number('Length; the width and 40 mm on each side when missing.', { min: 60, max: LONGEST_MM }) }, ['fixing', 'lengthMm']),
+      finish: ref('Finish'),
       hangs: choice('`turned` hangs with the end that was woven first at the top.', 'as-woven', 'turned'),
       seed: whole('Of the drawing’s chance.', { min: 0, max: Number.MAX_SAFE_INTEGER }),
       yarns: {
@@ -196,7 +218,7 @@ export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
       },
       bands: list('In the order they are woven.', ref('Band'), { minItems: 1, maxItems: 200 }),
     },
-    ['mode', 'allowances', 'dowel', 'hangs', 'seed'],
+    ['mode', 'allowances', 'dowel', 'finish', 'hangs', 'seed'],
   ),
   PieceQuestion: closed('A whole plan.', { what: { const: 'piece' }, piece: ref('Piece') }),
 };

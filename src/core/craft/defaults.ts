@@ -55,6 +55,17 @@ export const SPACING_ROWS = { fewest: 3, most: 4 } as const;
 /** P: the spacer card is this much wider than the warp. */
 export const SPACER_CARD_EXTRA_MM = 20;
 
+/** P: warp left to tuck back into the cloth. */
+export const TUCKED_MM = 60;
+/** P: warp the hand needs beyond a knot to tie it. */
+export const HANDLE_MM = 30;
+/** M: bundle diameters a tight overhand knot swallows (the tight open trefoil takes 10.1: Pieranski and others 2001). Measure one. */
+export const KNOT_DIAMETERS = 10;
+/** P: warp over the length it has as a twisted cord. */
+export const TWIST_RATIO = 1.25;
+/** P */
+export const FRINGE_BUNDLE_ENDS = 4;
+
 export const HANGING = {
   /** P: room between the loops on the dowel and the first row. */
   seatMm: 5,
@@ -64,6 +75,8 @@ export const HANGING = {
   cordInsetMm: 20,
   /** P: how high the cord rises over the dowel. */
   cordRiseMm: 120,
+  /** P: from one wrap of a lashing to the next. */
+  lashingPitchMm: 15,
   /** P: cord for one knot. */
   cordKnotMm: 150,
   /** Softer than any listed wood: aspen 8.1 to yellow birch 13.9 GPa (F). */

@@ -67,6 +67,6 @@ export function fitPiece(pattern: Piece, mine: MyPiece, units: Units = 'cm'): Ou
 export function roomOnLoom(piece: Piece): { readonly widthMm?: number; readonly heightMm: number } {
   const settings = settingsOf(piece.allowances ?? {}, piece.mode ?? 'straight-warp', piece.beat);
   const widthMm = largestWidth(piece.loom, piece.warp, settings);
-  const heightMm = largestHeight(piece.loom, piece.dowel, settings);
+  const heightMm = largestHeight(piece.loom, piece.warp, piece, settings);
   return widthMm === undefined ? { heightMm } : { widthMm, heightMm };
 }

@@ -1,5 +1,7 @@
 /** Taking the piece off and hanging it: knots, fringe, dowel, cord. */
-import { HANGING } from '#core/craft/defaults.ts';
+import { FRINGE_BUNDLE_ENDS, HANDLE_MM, HANGING, KNOT_DIAMETERS, TUCKED_MM, TWIST_RATIO } from '#core/craft/defaults.ts';
+import { ceilSafe } from '#core/craft/rounding.ts';
+import type { Finish } from '#core/craft/piece.ts';
 
 const GRAVITY = 9.80665;
 
@@ -8,19 +10,33 @@ export function bundleDiameter(ends: number, loftMm: number): number {
   return Math.sqrt(ends) * loftMm;
 }
 
-/** Warp a tight overhand knot swallows: ten bundle diameters (after the tight open trefoil, 10.1). Measure one. */
+/** Warp a tight overhand knot swallows. */
 export function overhandKnot(bundleMm: number): number {
-  return 10 * bundleMm;
+  return KNOT_DIAMETERS * bundleMm;
 }
 
 /** Warp needed below the cloth for a knotted fringe, with room for the hand. */
 export function endsForFringe(fringeMm: number, bundleMm: number): number {
-  return fringeMm + overhandKnot(bundleMm) + 30;
+  return fringeMm + overhandKnot(bundleMm) + HANDLE_MM;
 }
 
-/** Common practice: twisting takes a quarter. */
+/** Twisting two strands round each other shortens them. */
 export function endsForTwistedFringe(fringeMm: number): number {
-  return fringeMm * 1.25;
+  return fringeMm * TWIST_RATIO;
+}
+
+/** Warp a finish needs below the cloth; `loftMm` is one end lying free. */
+export function endsForFinish({ bottom, fringeMm = 0, bundleEnds = FRINGE_BUNDLE_ENDS }: Finish, loftMm: number): number {
+  switch (bottom) {
+    case 'knotted':
+      return endsForFringe(fringeMm, bundleDiameter(bundleEnds, loftMm));
+    case 'twisted':
+      return endsForTwistedFringe(fringeMm);
+    case 'tucked':
+      return TUCKED_MM;
+    case 'plain':
+      return fringeMm;
+  }
 }
 
 export function dowelLength(finishedWidthMm: number): number {
@@ -41,6 +57,11 @@ export function cordLength(spanMm: number, riseMm: number = HANGING.cordRiseMm):
 export function cordTension(massG: number, spanMm: number, riseMm: number = HANGING.cordRiseMm): number {
   const angle = Math.atan2(2 * riseMm, spanMm);
   return ((massG / 1000) * GRAVITY) / (2 * Math.sin(angle));
+}
+
+/** Wraps that lash a cloth of this width to its dowel, one at each selvedge. */
+export function lashingWraps(widthMm: number): number {
+  return ceilSafe(widthMm / HANGING.lashingPitchMm) + 1;
 }
 
 /** Yarn that lashes a cloth to its dowel: so many wraps, so far apart. */

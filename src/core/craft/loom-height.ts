@@ -1,5 +1,6 @@
 /** Height on the loom, from the finished height to the frame. */
-import { DEFAULT_ALLOWANCES, HANGING } from '#core/craft/defaults.ts';
+import { DEFAULT_ALLOWANCES, HANGING, TOP_FOR_TYING_MM } from '#core/craft/defaults.ts';
+import type { Dowel } from '#core/craft/piece.ts';
 
 /** Height to weave so that the cloth has its finished height when it is off the loom. Shares are divided out. */
 export function heightBeforeShrinking(finishedMm: number, relaxation: number, wetShrinkage: number): number {
@@ -16,13 +17,25 @@ export function topForDowel(dowelDiameterMm: number): number {
   return (Math.PI / 2) * dowelDiameterMm + HANGING.seatMm;
 }
 
-/** Unwoven warp at the top: what was asked, what the dowel takes, and room for the last shed. */
-export function topAllowance(askedMm: number, dowelDiameterMm: number | undefined, leastMm: number = DEFAULT_ALLOWANCES.topMm): number {
-  const dowelMm = dowelDiameterMm === undefined ? 0 : topForDowel(dowelDiameterMm);
-  return Math.max(askedMm, dowelMm, leastMm);
+/** Unwoven warp that holds the cloth to its dowel: loops go over it or are tied to it; a lashing goes through the cloth. */
+export function topForHanging(dowel: Pick<Dowel, 'diameterMm' | 'fixing'> | undefined): number {
+  if (dowel === undefined) return 0;
+  switch (dowel.fixing ?? 'slipped') {
+    case 'slipped':
+      return topForDowel(dowel.diameterMm);
+    case 'tied':
+      return Math.max(TOP_FOR_TYING_MM, topForDowel(dowel.diameterMm));
+    case 'lashed':
+      return 0;
+  }
 }
 
-/** Unwoven warp at the bottom: what was asked, and enough to knot or tuck the ends. */
-export function bottomAllowance(askedMm: number, leastMm: number = DEFAULT_ALLOWANCES.bottomMm): number {
-  return Math.max(askedMm, leastMm);
+/** Unwoven warp at the top: what was asked, what the dowel takes, and room for the last shed. */
+export function topAllowance(askedMm: number, dowel: Pick<Dowel, 'diameterMm' | 'fixing'> | undefined, leastMm: number = DEFAULT_ALLOWANCES.topMm): number {
+  return Math.max(askedMm, topForHanging(dowel), leastMm);
+}
+
+/** Unwoven warp at the bottom: what was asked, what the finish takes, and enough for any hand. */
+export function bottomAllowance(askedMm: number, finishMm = 0, leastMm: number = DEFAULT_ALLOWANCES.bottomMm): number {
+  return Math.max(askedMm, finishMm, leastMm);
 }

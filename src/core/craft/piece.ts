@@ -120,9 +120,25 @@ export interface Allowances {
   readonly marginWarp?: number;
 }
 
+/** How the cloth is held to its dowel: warp loops slipped on it, tied to it, or the edge lashed to it with yarn. */
+export type Fixing = 'slipped' | 'tied' | 'lashed';
+
 export interface Dowel {
   readonly diameterMm: number;
   readonly lengthMm?: number;
+  /** `slipped` when missing. */
+  readonly fixing?: Fixing;
+}
+
+/** What becomes of the warp ends below the cloth; `plain` leaves or cuts them as they are. */
+export type FinishWay = 'knotted' | 'twisted' | 'tucked' | 'plain';
+
+export interface Finish {
+  readonly bottom: FinishWay;
+  /** Fringe that is left to see, beyond knots; none when missing. Ends that are tucked in leave none. */
+  readonly fringeMm?: number;
+  /** Ends in a knot or a twisted cord; 4 when missing. */
+  readonly bundleEnds?: number;
 }
 
 export type ShapeKind = 'triangle' | 'rectangle' | 'circle' | 'points';
@@ -170,7 +186,15 @@ export type BandHeight =
   | { readonly fill: true; readonly heightMm?: never };
 
 export type TabbyBand = NamedBand &
-  BandHeight & { readonly technique: 'tabby'; readonly yarn: string; readonly shapes?: readonly Shape[] };
+  BandHeight & {
+    readonly technique: 'tabby';
+    readonly yarn: string;
+    /** Strands in one row of this band, instead of the yarn's own number: 2 is doubled weft. */
+    readonly strands?: number;
+    /** Two ends as one, and two strands in a row unless `strands` says otherwise. */
+    readonly basket?: boolean;
+    readonly shapes?: readonly Shape[];
+  };
 
 export interface SoumakBand extends NamedBand {
   readonly technique: 'soumak';
@@ -190,6 +214,8 @@ export interface RyaBand extends NamedBand {
   readonly strands: number;
   /** Ends in each of the knot's two legs. */
   readonly legEnds: number;
+  /** Plain ends at each selvedge; 0 when missing. */
+  readonly edgeEnds?: number;
   readonly pileMm: number;
   readonly trimMm: number;
   readonly rows: number;
@@ -232,6 +258,8 @@ export interface TwiningBand extends NamedBand {
   readonly technique: 'twining';
   readonly yarn: string;
   readonly rows: number;
+  /** Ends between two crossings of the strands; 1 when missing. */
+  readonly endsPerTwist?: number;
 }
 
 /** Every technique with the band it describes; a further technique is a further line here. */
@@ -258,6 +286,7 @@ export interface Piece {
   readonly mode?: WeaveMode;
   readonly allowances?: Allowances;
   readonly dowel?: Dowel;
+  readonly finish?: Finish;
   /** `turned` hangs with the end that was woven first at the top. */
   readonly hangs?: 'as-woven' | 'turned';
   /** Of the drawing's chance. */

@@ -79,6 +79,10 @@ export interface CutPlan {
   readonly spacerCard: { readonly widthMm: number; readonly heightMm: number };
   readonly dowel?: { readonly lengthMm: number; readonly minDiameterMm: number };
   readonly cordMm?: number;
+  /** Yarn that lashes the cloth to its dowel, where it is held so. */
+  readonly lashingMm?: number;
+  /** What the fixing in the wall must hold. */
+  readonly fixingHoldsG: number;
 }
 
 export interface Hours {

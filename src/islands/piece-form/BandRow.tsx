@@ -1,5 +1,6 @@
 import { useState } from 'react';
-import { isTechnique, TECHNIQUE_LABELS } from '#core/craft/piece-form/asked-of-band.ts';
+import { isTechnique } from '#core/craft/piece-form/asked-of-band.ts';
+import { TECHNIQUES } from '#core/craft/techniques/registry.ts';
 import { textOf, type TypedBand } from '#core/craft/piece-form/typed-piece.ts';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
@@ -47,5 +48,5 @@ export function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen
 function techniqueWords({ texts, shapes }: TypedBand): string {
   const technique = textOf(texts, 'technique');
   if (!isTechnique(technique)) return 'Band';
-  return technique === 'tabby' && shapes.length > 0 ? 'Tabby with shapes' : TECHNIQUE_LABELS[technique];
+  return technique === 'tabby' && shapes.length > 0 ? 'Tabby with shapes' : TECHNIQUES[technique].words.label;
 }

@@ -1,4 +1,4 @@
-import { ALLOWANCES, BEAT_BY, ENDS_TOGETHER, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
+import { ALLOWANCES, BEAT_BY, ENDS_TOGETHER, FINISH, FIXING, FRINGE, fringeAsked, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { LookButton } from './ActButton.tsx';
 import { AskedField, AskedFields } from './AskedField.tsx';
@@ -66,11 +66,17 @@ export function BeatFields() {
 
 export function HangingFields() {
   const { typed: { texts } } = useHands();
+  const fringe = fringeAsked(texts);
   return (
     <section aria-labelledby="hanging-title">
-      <h2 className="h3" id="hanging-title">Hanging</h2>
+      <h2 className="h3" id="hanging-title">Edges and hanging</h2>
       <div className="edit">
         <AskedFields asked={HANGING} texts={texts} className="half" />
+        <AskedField asked={FIXING} texts={texts} className="whole" />
+        <AskedField asked={FINISH} texts={texts} className="whole" />
+        <LookButton to="hanging-title">Show what this finish asks</LookButton>
+        <AskedFields asked={fringe} texts={texts} className="half" />
+        <HiddenTexts texts={Object.fromEntries(FRINGE.map(({ key }) => [key, textOf(texts, key)]))} prefix="" shown={new Set(fringe.map(({ key }) => key))} />
         <AskedField asked={HANGS} texts={texts} className="whole" />
       </div>
     </section>

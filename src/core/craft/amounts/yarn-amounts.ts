@@ -28,7 +28,7 @@ export function loftTrust(yarn: Yarn): Trust {
 }
 
 function lengthTrust({ piece, yarn, role }: PlannedYarn): Trust {
-  const inPicks = piece.bands.some((band) => techniqueOf(band).roles(band).some((named) => named.role === role && named.inPicks));
+  const inPicks = piece.bands.some((band) => techniqueOf(band).roles(band).some((named) => named.role === role && named.picks !== undefined));
   return inPicks ? leastTrust(beatTrust(piece), loftTrust(yarn)) : loftTrust(yarn);
 }
 

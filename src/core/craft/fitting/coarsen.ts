@@ -19,7 +19,7 @@ const strandMm = (yarn: Yarn): number => threadOf({ ...yarn, strands: 1 }, ASHEN
 
 /** Roles whose picks must close between the ends. */
 function pickRoles(piece: Piece): readonly string[] {
-  const roles = piece.bands.flatMap((band) => rolesOf(band).filter(({ inPicks }) => inPicks).map(({ role }) => role));
+  const roles = piece.bands.flatMap((band) => rolesOf(band).filter(({ picks }) => picks !== undefined).map(({ role }) => role));
   return [...new Set(roles)].filter((role) => Object.hasOwn(piece.yarns, role));
 }
 

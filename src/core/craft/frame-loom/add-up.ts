@@ -1,17 +1,18 @@
 /** Adding the plan up, once everything is sound and fits together. */
-import { SPACER_CARD_EXTRA_MM } from '#core/craft/defaults.ts';
+import { HANGING, SPACER_CARD_EXTRA_MM, TIE_MM } from '#core/craft/defaults.ts';
 import { countWarp, countYarn } from '#core/craft/frame-loom/count-yarn.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import type { PieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
 import type { StackedBand } from '#core/craft/frame-loom/stack-bands.ts';
-import { cordLength, cordSpan, dowelLength, leastDowelDiameter } from '#core/craft/hanging.ts';
-import type { Dowel, Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
+import { cordLength, cordSpan, dowelLength, lashingLength, lashingWraps, leastDowelDiameter } from '#core/craft/hanging.ts';
+import type { Edges } from '#core/craft/frame-loom/room.ts';
+import type { Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
 import { pickLength } from '#core/craft/picks.ts';
 import type { BandPlan, CutPlan, LoomPlan, Plan, WeftPlan, YarnPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
-import { picksOn, type DressedLoom, type Woven } from '#core/craft/techniques/technique.ts';
+import type { DressedLoom, LaidPicks, Woven } from '#core/craft/techniques/technique.ts';
 import { hoursOf, type Work } from '#core/craft/time.ts';
 
 /** A piece that is sound and fits its loom, with all that adding up needs. */
@@ -20,7 +21,7 @@ export interface PieceOnLoom {
   readonly size: Piece['size'];
   readonly loom: Loom;
   readonly warp: Warp;
-  readonly hanging: { readonly dowel?: Dowel };
+  readonly edges: Edges;
   readonly yarns: ReadonlyMap<string, Yarn | undefined>;
   readonly settings: Settings;
   readonly height: Omit<LoomPlan, 'insideWidthNeededMm'>;
@@ -43,27 +44,33 @@ function planBand({ index, band, heightMm, woven }: WovenBand): BandPlan {
   return { index, technique: band.technique, heightMm, ...woven.counts, yarnMm };
 }
 
-/** The yarn most picks are woven with; the one woven first where two are alike. */
-export function mainWeft(bands: readonly WovenBand[], laid: DressedLoom): { readonly role: string; readonly rawPicks: number } {
+/** The picks most rows are woven in; those woven first where two are alike. */
+export function mainWeft(bands: readonly WovenBand[], laid: DressedLoom): { readonly geometry: LaidPicks; readonly rawPicks: number } {
   const runs = bands.flatMap(({ woven }) => (woven.picks === undefined ? [] : [woven.picks]));
-  const totals = [...laid.picks.keys()].map((role) => {
-    const own = runs.filter((run) => run.role === role);
-    return { role, rows: own.reduce((sum, { rows }) => sum + rows, 0), rawPicks: own.reduce((sum, { rawRows }) => sum + rawRows, 0) };
+  const totals = [...laid.picks].map(([key, geometry]) => {
+    const own = runs.filter((run) => run.key === key);
+    return { geometry, rows: own.reduce((sum, { rows }) => sum + rows, 0), rawPicks: own.reduce((sum, { rawRows }) => sum + rawRows, 0) };
   });
   return totals.reduce((most, next) => (next.rows > most.rows ? next : most));
 }
 
 function planWeft(bands: readonly WovenBand[], laid: DressedLoom): WeftPlan {
-  const { role, rawPicks } = mainWeft(bands, laid);
-  const { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm } = picksOn(laid, role);
-  const pickMm = pickLength(laid.workingEnds, { stepMm, turnMm });
+  const { geometry, rawPicks } = mainWeft(bands, laid);
+  const { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm } = geometry;
+  const pickMm = pickLength(geometry.workingEnds, geometry);
   return { diameterSumMm, pickSpacingMm, tightness, crimp, stepMm, turnMm, pickMm, rawPicks };
 }
 
-function planCut({ size, hanging, dressed, height }: PieceOnLoom, massG: number, findings: Findings): CutPlan {
+/** Yarn as thick as the warp, tied at both ends. */
+function lashingYarn(widthMm: number, dowelMm: number, yarnLoftMm: number): number {
+  return lashingLength(lashingWraps(widthMm), HANGING.lashingPitchMm, dowelMm, yarnLoftMm) + 2 * TIE_MM;
+}
+
+function planCut({ size, edges, dressed, height }: PieceOnLoom, massG: number, findings: Findings): CutPlan {
+  const fixingHoldsG = HANGING.fixingFactor * massG;
   const spacerCard = { widthMm: dressed.ends.woundWidthMm + SPACER_CARD_EXTRA_MM, heightMm: height.bottomMm };
-  const { dowel } = hanging;
-  if (dowel === undefined) return { spacerCard };
+  const { dowel } = edges;
+  if (dowel === undefined) return { spacerCard, fixingHoldsG };
   const lengthMm = dowel.lengthMm ?? dowelLength(size.widthMm);
   const spanMm = cordSpan(lengthMm);
   const minDiameterMm = leastDowelDiameter(massG, spanMm);
@@ -73,7 +80,8 @@ function planCut({ size, hanging, dressed, height }: PieceOnLoom, massG: number,
   if (dowel.diameterMm < minDiameterMm) {
     findings.warn('W_DOWEL', '/dowel/diameterMm', `This dowel will sag under the piece. ${findings.length(minDiameterMm, 'up')} and thicker holds.`);
   }
-  return { spacerCard, dowel: { lengthMm, minDiameterMm }, cordMm: cordLength(spanMm) };
+  const cut = { spacerCard, dowel: { lengthMm, minDiameterMm }, cordMm: cordLength(spanMm), fixingHoldsG };
+  return dowel.fixing === 'lashed' ? { ...cut, lashingMm: lashingYarn(size.widthMm, dowel.diameterMm, dressed.thread.loftMm) } : cut;
 }
 
 /** What there is to do in all bands, and the warp. */

@@ -66,12 +66,19 @@ function loadsFor(uses: readonly YarnUse[], loadMm: number): Loads {
   return { joined, count: joined + ceilSafe(byTheRowMm / loadMm) };
 }
 
+/** Strands wound together, on average: bands may take other numbers of them. */
+function strandsOnShuttle(uses: readonly YarnUse[]): number {
+  const wound = uses.filter(({ carry }) => carry === 'shuttle');
+  const threadMm = sum(wound, 'threadMm');
+  return threadMm === 0 ? 0 : sum(wound, 'yarnMm') / threadMm;
+}
+
 /** One weft yarn over all bands. */
 export function countYarn(role: string, yarn: Yarn, woven: readonly Woven[], loom: DressedLoom, settings: Settings, findings: Findings): YarnPlan {
   const uses = woven.flatMap((band) => band.uses.filter((use) => use.role === role));
-  const { tex, strands } = threadOn(loom, role);
+  const { tex } = threadOn(loom, role);
   const loads = loadsFor(uses, settings.loadMm);
-  const tailsMm = loads.joined * 2 * settings.tailMm * strands;
+  const tailsMm = loads.joined * 2 * settings.tailMm * strandsOnShuttle(uses);
   const netMm = sum(uses, 'yarnMm') + tailsMm;
   const rowMm = mainRow(uses);
   return {

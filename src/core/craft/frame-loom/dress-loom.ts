@@ -2,11 +2,10 @@
 import { NAIL_DIAMETER_MM, ASHENHURST_K } from '#core/craft/defaults.ts';
 import { END_RANGE, endsFor, endsSuit, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
-import { loomKind } from '#core/craft/looms/looms.ts';
-import { bottomAllowance, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
-import { largestHeight, largestWidth, layoutOf, widthOfEnds } from '#core/craft/frame-loom/room.ts';
+import { heightBeforeShrinking } from '#core/craft/loom-height.ts';
+import { bareWarp, largestHeight, largestWidth, layoutOf, widthOfEnds, type Edges } from '#core/craft/frame-loom/room.ts';
 import { endsPerMm, nailsUsed, railNeeded, spacingRows, workingSpacing, zigzagGaps } from '#core/craft/nails.ts';
-import type { Dowel, EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
+import type { EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
 import type { EndsPlan, LoomPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { diameterTogether } from '#core/craft/yarn/diameter.ts';
@@ -110,14 +109,12 @@ export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings:
 }
 
 /** Height of cloth and bare warp, against the frame. */
-export function fitHeight(size: Piece['size'], loom: Loom, settings: Settings, dowel: Dowel | undefined, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
+export function fitHeight(size: Piece['size'], loom: Loom, warp: Warp | undefined, edges: Edges, settings: Settings, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
   const heightOnLoomMm = heightBeforeShrinking(size.heightMm, settings.relaxation, settings.wetShrinkage);
-  const least = loomKind(loom).leastBareMm;
-  const topMm = topAllowance(settings.topMm, dowel?.diameterMm, least.top);
-  const bottomMm = bottomAllowance(settings.bottomMm, least.bottom);
+  const { topMm, bottomMm } = bareWarp(loom, warp, edges, settings);
   const heightNeededMm = heightOnLoomMm + topMm + bottomMm;
   if (loom.insideHeightMm < heightNeededMm - HAIR_MM) {
-    const largestMm = largestHeight(loom, dowel, settings);
+    const largestMm = largestHeight(loom, warp, edges, settings);
     const largest = largestMm === 0 ? 'No height fits beside the unwoven warp.' : `Up to ${findings.length(largestMm, 'down')} of cloth fit.`;
     const inside = `The loom is ${findings.length(loom.insideHeightMm)} high inside.`;
     findings.reject('E_FIT', '/loom/insideHeightMm', `${inside} The piece needs ${findings.length(heightNeededMm, 'up')}. ${largest}`);

@@ -2,11 +2,13 @@
 import { ASHENHURST_K, TIGHTNESS } from '#core/craft/defaults.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import type { Beat, WeaveMode, Yarn } from '#core/craft/piece.ts';
-import { BEAT_RANGE, beatOfSwatch, pickGeometry, pickSpacing, type PickGeometry } from '#core/craft/picks.ts';
+import { BEAT_RANGE, beatOfSwatch, pickGeometry, pickSpacing } from '#core/craft/picks.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import { adviseSpacing, spacingThatSuits, strandsFor, tightness } from '#core/craft/sett.ts';
-import { threadOf, type Thread } from '#core/craft/yarn/thread.ts';
+import type { LaidPicks, PickOf } from '#core/craft/techniques/technique.ts';
+import { diameterTogether } from '#core/craft/yarn/diameter.ts';
+import { threadOf, withStrands, type Thread } from '#core/craft/yarn/thread.ts';
 
 export function threadsOf(yarns: ReadonlyMap<string, Yarn | undefined>): ReadonlyMap<string, Thread> {
   const threads = new Map<string, Thread>();
@@ -16,51 +18,74 @@ export function threadsOf(yarns: ReadonlyMap<string, Yarn | undefined>): Readonl
   return threads;
 }
 
+/** A yarn between the ends it meets. */
+interface Crossed {
+  readonly pick: PickOf;
+  /** Where it stands in the piece. */
+  readonly path: string;
+  readonly thread: Thread;
+  readonly workingEnds: number;
+  readonly spacingMm: number;
+  /** Compressed, of what it meets as one end. */
+  readonly warpMm: number;
+}
+
+/** In basket weave two working ends are met as one, √2 as thick. */
+function crossedBy(pick: PickOf, thread: Thread, { ends, workingDiameterMm }: DressedWarp): Crossed {
+  const together = pick.pairs === true ? 2 : 1;
+  return {
+    pick,
+    path: below('/yarns', pick.role),
+    thread: pick.strands === undefined ? thread : withStrands(thread, pick.strands),
+    workingEnds: Math.floor(ends.working / together),
+    spacingMm: ends.spacingMm * together,
+    warpMm: diameterTogether(workingDiameterMm, together),
+  };
+}
+
 /** What would let a thick yarn close, in the order of how easily it is done. */
-function waysOut(warp: DressedWarp, thread: Thread, findings: Findings): string {
+function waysOut({ thread, warpMm }: Crossed, findings: Findings): string {
   const fewerStrands = thread.strands > 1 ? 'fewer strands together, ' : '';
-  const least = findings.length(warp.workingDiameterMm + thread.compressedMm, 'up');
+  const least = findings.length(warpMm + thread.compressedMm, 'up');
   return `Use a thinner yarn, ${fewerStrands}or ends at least ${least} apart.`;
 }
 
-function reportJam(role: string, warp: DressedWarp, thread: Thread, findings: Findings): void {
-  const yarn = `This yarn is ${findings.length(thread.compressedMm)} thick. With ends ${findings.length(warp.ends.spacingMm)} apart the rows cannot close.`;
-  findings.reject('E_JAM', below('/yarns', role), `${yarn} ${waysOut(warp, thread, findings)}`);
+function reportJam(crossed: Crossed, findings: Findings): void {
+  const { path, thread, spacingMm } = crossed;
+  const yarn = `This yarn is ${findings.length(thread.compressedMm)} thick. With ends ${findings.length(spacingMm)} apart the rows cannot close.`;
+  findings.reject('E_JAM', path, `${yarn} ${waysOut(crossed, findings)}`);
 }
 
 /** How many strands of it would come out well; a warp that loosens by itself leaves that open. */
-function strandsWords(warp: DressedWarp, thread: Thread): string {
-  const strandMm = thread.compressedMm / Math.sqrt(thread.strands);
-  const strands = strandsFor(warp.ends.spacingMm, warp.workingDiameterMm, strandMm);
+function strandsWords({ thread, spacingMm, warpMm }: Crossed): string {
+  const strands = strandsFor(spacingMm, warpMm, withStrands(thread, 1).compressedMm);
   return strands === undefined || strands <= thread.strands ? 'Take more strands together' : `Take ${String(strands)} strands together`;
 }
 
-function reportWeftFaced(role: string, warp: DressedWarp, thread: Thread, findings: Findings): void {
-  const path = below('/yarns', role);
-  const { spacingMm } = warp.ends;
-  if (tightness(warp.workingDiameterMm, thread.loftMm, spacingMm) > 1) {
+function reportWeftFaced(crossed: Crossed, findings: Findings): void {
+  const { path, thread, spacingMm, warpMm } = crossed;
+  if (tightness(warpMm, thread.loftMm, spacingMm) > 1) {
     findings.warn('W_WARP_SHOWS', path, 'This yarn is as thick as the room between the ends: it will not beat down, and the warp will show.');
-  } else if (adviseSpacing(spacingMm, warp.workingDiameterMm, thread.loftMm) === 'too-thick') {
-    const suits = findings.length(spacingThatSuits(warp.workingDiameterMm, thread.loftMm), 'up');
+  } else if (adviseSpacing(spacingMm, warpMm, thread.loftMm) === 'too-thick') {
+    const suits = findings.length(spacingThatSuits(warpMm, thread.loftMm), 'up');
     findings.warn('W_THICK', path, `This yarn is thick for ends so close, and hard to beat down. It suits ends ${suits} apart and more.`);
   }
-  if (tightness(warp.workingDiameterMm, thread.compressedMm, spacingMm) < TIGHTNESS.loose) {
-    findings.warn('W_LOOSE', path, `This yarn is thin for the room between the ends, and the rows may slip. ${strandsWords(warp, thread)}, or set the ends closer.`);
+  if (tightness(warpMm, thread.compressedMm, spacingMm) < TIGHTNESS.loose) {
+    findings.warn('W_LOOSE', path, `This yarn is thin for the room between the ends, and the rows may slip. ${strandsWords(crossed)}, or set the ends closer.`);
   }
 }
 
-/** The picks of one yarn, unless it jams. */
-function layYarn(role: string, warp: DressedWarp, thread: Thread, beat: Beat, mode: WeaveMode, findings: Findings): PickGeometry | undefined {
-  const spacing = pickSpacing(beat, thread.compressedMm);
-  const geometry = pickGeometry({
-    spacingMm: warp.ends.spacingMm,
-    warpDiameterMm: warp.workingDiameterMm,
-    weftDiameterMm: thread.compressedMm,
-    pickSpacingMm: spacing,
-    mode,
-  });
+interface Cloth {
+  readonly beat: Beat;
+  readonly mode: WeaveMode;
+}
+
+/** The picks of one yarn, unless it jams. `spacing` from row to row. */
+function layYarn(crossed: Crossed, spacing: number, mode: WeaveMode, findings: Findings): LaidPicks | undefined {
+  const { path, pick, thread, workingEnds, spacingMm, warpMm } = crossed;
+  const geometry = pickGeometry({ spacingMm, warpDiameterMm: warpMm, weftDiameterMm: thread.compressedMm, pickSpacingMm: spacing, mode });
   if (geometry === undefined) {
-    reportJam(role, warp, thread, findings);
+    reportJam(crossed, findings);
     return undefined;
   }
   if (beatOfSwatch(1, spacing, thread.compressedMm) > BEAT_RANGE.max + 1e-9) {
@@ -68,26 +93,33 @@ function layYarn(role: string, warp: DressedWarp, thread: Thread, beat: Beat, mo
     findings.reject('E_RANGE', '/beat/picksPerCm', `Rows of this yarn cannot lie so close: up to ${String(most)} in a centimetre work. Count the swatch again.`);
   }
   if (geometry.clamped) {
-    findings.warn('W_CLAMPED', below('/yarns', role), 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
+    findings.warn('W_CLAMPED', path, 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
   }
-  if (mode === 'straight-warp') reportWeftFaced(role, warp, thread, findings);
-  return geometry;
+  if (mode === 'straight-warp') reportWeftFaced(crossed, findings);
+  return { ...geometry, pick, workingEnds, spacingMm };
 }
 
-/** Picks of every yarn that is woven in picks; one that jams is reported and missing. */
+/** A swatch was counted with the yarn as it is taken together otherwise; rows of more strands lie as much further apart. */
+function rowSpacing(beat: Beat, usual: Thread, { thread }: Crossed): number {
+  const scale = beat.picksPerCm === undefined ? 1 : thread.compressedMm / usual.compressedMm;
+  return pickSpacing(beat, thread.compressedMm) * scale;
+}
+
+/** Every way in which yarn is woven in picks, by its key; one that jams is reported and missing. */
 export function layWeft(
-  roles: ReadonlySet<string>,
+  ways: ReadonlyMap<string, PickOf>,
   threads: ReadonlyMap<string, Thread>,
   warp: DressedWarp,
-  cloth: { readonly beat: Beat; readonly mode: WeaveMode },
+  { beat, mode }: Cloth,
   findings: Findings,
-): ReadonlyMap<string, PickGeometry> {
-  const picks = new Map<string, PickGeometry>();
-  for (const role of roles) {
-    const thread = threads.get(role);
+): ReadonlyMap<string, LaidPicks> {
+  const picks = new Map<string, LaidPicks>();
+  for (const [key, pick] of ways) {
+    const thread = threads.get(pick.role);
     if (thread === undefined) continue;
-    const geometry = layYarn(role, warp, thread, cloth.beat, cloth.mode, findings);
-    if (geometry !== undefined) picks.set(role, geometry);
+    const crossed = crossedBy(pick, thread, warp);
+    const geometry = layYarn(crossed, rowSpacing(beat, thread, crossed), mode, findings);
+    if (geometry !== undefined) picks.set(key, geometry);
   }
   return picks;
 }

@@ -10,10 +10,13 @@ import { layWeft, threadsOf } from '#core/craft/frame-loom/lay-weft.ts';
 import { readPieceParts, type PieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import { settingsOf, type Settings } from '#core/craft/frame-loom/settings.ts';
 import { collectRoles, stackBands, type UsedRoles } from '#core/craft/frame-loom/stack-bands.ts';
+import { finishRoom, type Edges } from '#core/craft/frame-loom/room.ts';
+import type { Warp } from '#core/craft/piece.ts';
 import type { Plan } from '#core/craft/plan-types.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { below, type Findings } from '#core/craft/reading/findings.ts';
-import type { DressedLoom } from '#core/craft/techniques/technique.ts';
+import { techniqueOf } from '#core/craft/techniques/registry.ts';
+import { pickKey, type DressedLoom, type PickOf } from '#core/craft/techniques/technique.ts';
 
 function warnOfUnused(parts: PieceParts, { named }: UsedRoles, findings: Findings): void {
   for (const role of parts.yarns.keys()) {
@@ -22,8 +25,8 @@ function warnOfUnused(parts: PieceParts, { named }: UsedRoles, findings: Finding
 }
 
 /** Bands without a single pick still need the plan's weft numbers: those of their first yarn. */
-function rolesToLay({ inPicks, named }: UsedRoles): ReadonlySet<string> {
-  return inPicks.size > 0 ? inPicks : new Set([...named].slice(0, 1));
+function picksToLay({ inPicks, named }: UsedRoles): ReadonlyMap<string, PickOf> {
+  return inPicks.size > 0 ? inPicks : new Map([...named].slice(0, 1).map((role) => [pickKey({ role }), { role }]));
 }
 
 export function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: UsedRoles, findings: Findings): DressedLoom | undefined {
@@ -38,8 +41,26 @@ export function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, 
     beat,
     tailMm: settings.tailMm,
     threads,
-    picks: layWeft(rolesToLay(used), threads, warp, { beat, mode }, findings),
+    picks: layWeft(picksToLay(used), threads, warp, { beat, mode }, findings),
   };
+}
+
+/** What the bands demand of the number of working ends comes on top of what the pattern asks. */
+function withBandsParity(warp: Warp, bands: PieceParts['bands'], findings: Findings): Warp {
+  const index = bands.findIndex((band) => band !== undefined && techniqueOf(band).needsEvenEnds?.(band) === true);
+  if (index < 0 || warp.parity === 'even') return warp;
+  if (warp.parity === 'odd') {
+    findings.reject('E_PARITY', '/warp/parity', `Band ${String(index + 1)} takes the ends in pairs, so their number must be even. Ask for an even one, or for any.`);
+  }
+  return { ...warp, parity: 'even' };
+}
+
+/** Asked for too little, the finish takes what it needs; that is worth a word. */
+function warnOfShortEnds({ allowances, warp }: PieceParts, { finish }: Edges, findings: Findings): void {
+  const askedMm = allowances?.bottomMm;
+  const neededMm = finishRoom(warp, finish);
+  if (askedMm === undefined || askedMm >= neededMm) return;
+  findings.warn('W_FRINGE', '/allowances/bottomMm', `The finish needs ${findings.length(neededMm, 'up')} of warp below the cloth; that is left, instead of ${findings.length(askedMm)}.`);
 }
 
 export function settingsFrom({ allowances, mode, beat }: PieceParts): Settings | undefined {
@@ -51,17 +72,19 @@ export function settingsFrom({ allowances, mode, beat }: PieceParts): Settings |
 export function putOnLoom(fields: Fields): PieceOnLoom | undefined {
   const { findings } = fields;
   const parts = readPieceParts(fields);
-  const { size, loom, warp, hanging } = parts;
+  const { size, loom, edges } = parts;
+  const warp = parts.warp && withBandsParity(parts.warp, parts.bands, findings);
   const used = collectRoles(parts.bands, new Set(parts.yarns.keys()), findings);
   warnOfUnused(parts, used, findings);
   const settings = settingsFrom(parts);
   if (settings === undefined || size === undefined || loom === undefined) return undefined;
-  const height = hanging && fitHeight(size, loom, settings, hanging.dowel, findings);
+  const height = edges && fitHeight(size, loom, warp, edges, settings, findings);
+  if (edges !== undefined) warnOfShortEnds(parts, edges, findings);
   const dressed = warp && dressWarp(size, loom, warp, settings, findings);
   const laid = dressed && layOn(dressed, parts, settings, used, findings);
   const stacked = laid && stackBands(parts.bands, size.heightMm, laid, findings);
-  if (findings.count > 0 || !hanging || !height || !warp || !dressed || !laid || !stacked) return undefined;
-  return { parts, size, loom, warp, hanging, yarns: parts.yarns, settings, height, dressed, laid, stacked };
+  if (findings.count > 0 || !edges || !height || !warp || !dressed || !laid || !stacked) return undefined;
+  return { parts, size, loom, warp, edges, yarns: parts.yarns, settings, height, dressed, laid, stacked };
 }
 
 /** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */

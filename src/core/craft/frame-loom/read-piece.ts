@@ -2,7 +2,8 @@
  * Reading a frame-loom piece. Every part is read for itself, so that all that is wrong
  * is told at once, and what is sound can still be checked against its neighbours.
  */
-import type { Allowances, Band, Beat, Dowel, Loom, Piece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Beat, Dowel, Finish, FinishWay, Fixing, Loom, Piece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Edges } from '#core/craft/frame-loom/room.ts';
 import type { LoomKind } from '#core/craft/looms/loom-kind.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import { BEAT_RANGE } from '#core/craft/picks.ts';
@@ -22,14 +23,15 @@ export interface PieceParts {
   readonly beat: Beat | undefined;
   readonly mode: WeaveMode;
   readonly allowances: Allowances | undefined;
-  /** Empty when the piece has no dowel. */
-  readonly hanging: { readonly dowel?: Dowel } | undefined;
+  readonly edges: Edges | undefined;
   /** Every role, with its yarn where that is sound. */
   readonly yarns: ReadonlyMap<string, Yarn | undefined>;
   /** In their own order, a gap where one was refused. */
   readonly bands: readonly (Band | undefined)[];
 }
 
+const FIXINGS = ['slipped', 'tied', 'lashed'] as const satisfies readonly Fixing[];
+const FINISH_WAYS = ['knotted', 'twisted', 'tucked', 'plain'] as const satisfies readonly FinishWay[];
 const MOST_BANDS = 200;
 const MOST_YARNS = 60;
 const ROLE = /^[a-z][a-z0-9-]{0,39}$/i;
@@ -135,13 +137,38 @@ function readAllowances(fields: Fields): Allowances {
   return allowances;
 }
 
-function readHanging(fields: Fields): { readonly dowel?: Dowel } {
+function readDowel(fields: Fields): Dowel | undefined {
   const group = fields.optionalGroup('dowel', 'Dowel');
-  if (group === undefined) return {};
-  const diameterMm = group.number('diameterMm', length('Thickness of the dowel', 200));
-  const lengthMm = group.optionalNumber('lengthMm', { name: 'Length of the dowel', min: 60, max: LONGEST_MM, unit: 'mm' });
+  if (group === undefined) return undefined;
+  const dowel = {
+    diameterMm: group.number('diameterMm', length('Thickness of the dowel', 200)),
+    ...present({
+      lengthMm: group.optionalNumber('lengthMm', { name: 'Length of the dowel', min: 60, max: LONGEST_MM, unit: 'mm' }),
+      fixing: group.optionalChoice('fixing', 'How it is held to the dowel', FIXINGS),
+    }),
+  };
   group.end();
-  return { dowel: lengthMm === undefined ? { diameterMm } : { diameterMm, lengthMm } };
+  return dowel;
+}
+
+function readFinish(fields: Fields): Finish | undefined {
+  const group = fields.optionalGroup('finish', 'Finish');
+  if (group === undefined) return undefined;
+  const bottom = group.choice('bottom', 'Finish of the lower ends', FINISH_WAYS);
+  // What a finish does not have is left to be refused as unknown.
+  const finish = {
+    bottom,
+    ...present({
+      fringeMm: bottom === 'tucked' ? undefined : group.optionalNumber('fringeMm', { name: 'Length of the fringe', min: 0, max: 2000, unit: 'mm' }),
+      bundleEnds: bottom === 'knotted' || bottom === 'twisted' ? group.optionalNumber('bundleEnds', { name: 'Ends in a bundle', min: 1, max: 100, whole: true }) : undefined,
+    }),
+  };
+  group.end();
+  return finish;
+}
+
+function readEdges(fields: Fields): Edges {
+  return present({ dowel: readDowel(fields), finish: readFinish(fields) });
 }
 
 function readYarns(fields: Fields): ReadonlyMap<string, Yarn | undefined> {
@@ -202,7 +229,7 @@ export function readPieceParts(fields: Fields): PieceParts {
     beat: findings.soundly(() => readBeat(fields)),
     mode: fields.optionalChoice('mode', 'Mode', ['straight-warp', 'balanced']) ?? 'straight-warp',
     allowances: findings.soundly(() => readAllowances(fields)),
-    hanging: findings.soundly(() => readHanging(fields)),
+    edges: findings.soundly(() => readEdges(fields)),
     yarns: readYarns(fields),
     bands: readBands(fields),
   };

@@ -2,7 +2,7 @@
 import type { Band } from '#core/craft/piece.ts';
 import { below, type Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
-import type { BandReport, DressedLoom, NamedRole } from '#core/craft/techniques/technique.ts';
+import { pickKey, type BandReport, type DressedLoom, type NamedRole, type PickOf } from '#core/craft/techniques/technique.ts';
 
 export interface StackedBand {
   readonly index: number;
@@ -26,22 +26,22 @@ export function rolesOf(band: Band): readonly NamedRole[] {
 
 export interface UsedRoles {
   readonly named: ReadonlySet<string>;
-  /** Those of which picks are woven. */
-  readonly inPicks: ReadonlySet<string>;
+  /** Picks that are woven, by their `pickKey`. */
+  readonly inPicks: ReadonlyMap<string, PickOf>;
 }
 
 /** The yarn roles the bands name. Reports those that no yarn has, unless there are no yarns to name. */
 export function collectRoles(bands: readonly (Band | undefined)[], known: ReadonlySet<string>, findings: Findings): UsedRoles {
   const named = new Set<string>();
-  const inPicks = new Set<string>();
+  const inPicks = new Map<string, PickOf>();
   bands.forEach((band, index) => {
     if (band === undefined) return;
-    for (const { key, role, inPicks: woven } of rolesOf(band)) {
+    for (const { key, role, picks } of rolesOf(band)) {
       if (known.size > 0 && !known.has(role)) {
         findings.reject('E_ENUM', `${pathOf(index)}/${key}`, `No yarn of this piece is called “${role}”. There are: ${[...known].join(', ')}.`);
       }
       named.add(role);
-      if (woven) inPicks.add(role);
+      if (picks !== undefined) inPicks.set(pickKey(picks), picks);
     }
   });
   return { named, inPicks };
@@ -49,7 +49,7 @@ export function collectRoles(bands: readonly (Band | undefined)[], known: Readon
 
 /** Whether all a band is made of is sound, so that its own measures can be looked at. */
 export function isReady(band: Band, loom: DressedLoom): boolean {
-  return rolesOf(band).every(({ role, inPicks }) => loom.threads.has(role) && (!inPicks || loom.picks.has(role)));
+  return rolesOf(band).every(({ role, picks }) => loom.threads.has(role) && (picks === undefined || loom.picks.has(pickKey(picks))));
 }
 
 function reportOf(index: number, findings: Findings): BandReport {

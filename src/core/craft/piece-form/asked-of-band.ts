@@ -1,22 +1,13 @@
 /** What is asked of a band: its technique, and what that technique wants to know. */
 import type { TechniqueName } from '#core/craft/piece.ts';
-import { TECHNIQUE_NAMES } from '#core/craft/techniques/registry.ts';
-import { option, type Asked } from './asked.ts';
-
-export const TECHNIQUE_LABELS: Readonly<Record<TechniqueName, string>> = {
-  tabby: 'Tabby',
-  soumak: 'Soumak',
-  rya: 'Rya fringe',
-  roving: 'Roving',
-  'hem-stitch': 'Hem-stitch',
-  'loop-pile': 'Loop pile',
-  twining: 'Twining',
-};
+import { TECHNIQUE_NAMES, TECHNIQUES } from '#core/craft/techniques/registry.ts';
+import { option, type Asked, type Option } from './asked.ts';
 
 const [firstName, ...otherNames] = TECHNIQUE_NAMES;
+const techniqueOption = (name: TechniqueName): Option => option(name, TECHNIQUES[name].words.label);
 export const TECHNIQUE: Asked = {
   key: 'technique', kind: 'choice', label: 'Technique', needed: true,
-  options: [option(firstName, TECHNIQUE_LABELS[firstName]), ...otherNames.map((name) => option(name, TECHNIQUE_LABELS[name]))],
+  options: [techniqueOption(firstName), ...otherNames.map(techniqueOption)],
 };
 
 export const BAND_NAME: Asked = { key: 'name', kind: 'text', label: 'Name in texts', maxLength: 40, hint: 'As lessons ask for its amounts: dunes, sky-2.', otherwise: 'no amounts of its own' };
@@ -30,7 +21,12 @@ const height = (starter?: number): Asked => ({ key: 'heightMm', kind: 'length', 
 const over = (): Asked => ({ key: 'over', kind: 'number', label: 'Over', called: 'Ends passed over', unit: 'ends', needed: true, starter: 4 });
 
 export const BAND_FIELDS: Readonly<Record<TechniqueName, readonly Asked[]>> = {
-  tabby: [yarn, height()],
+  tabby: [
+    yarn,
+    height(),
+    { key: 'strands', kind: 'number', label: 'Strands in a row', otherwise: 'as the yarn is taken' },
+    { key: 'basket', kind: 'choice', label: 'Weave', options: [{ text: '', value: false, label: 'Plain' }, { text: 'yes', value: true, label: 'Basket, two ends as one' }] },
+  ],
   soumak: [
     yarn,
     over(),
@@ -43,6 +39,7 @@ export const BAND_FIELDS: Readonly<Record<TechniqueName, readonly Asked[]>> = {
     yarn,
     { key: 'strands', kind: 'number', label: 'Strands in a knot', needed: true, starter: 3 },
     { key: 'legEnds', kind: 'number', label: 'Ends in a leg', called: 'Ends in each leg', unit: 'ends', needed: true, starter: 1 },
+    { key: 'edgeEnds', kind: 'number', label: 'Plain at each edge', called: 'Plain ends at each selvedge', unit: 'ends', otherwise: 'none' },
     { key: 'pileMm', kind: 'length', label: 'Pile', called: 'Length of the pile', needed: true, starter: 100 },
     { key: 'trimMm', kind: 'fine', label: 'To trim away', called: 'Length to trim away', needed: true, starter: 10 },
     rows(1),
@@ -67,7 +64,7 @@ export const BAND_FIELDS: Readonly<Record<TechniqueName, readonly Asked[]>> = {
     rows(4),
     height(20),
   ],
-  twining: [yarn, rows(2)],
+  twining: [yarn, rows(2), { key: 'endsPerTwist', kind: 'number', label: 'Crossed every', called: 'Ends between two crossings', unit: 'ends', otherwise: 'end' }],
 };
 
 export const isTechnique = (text: string): text is TechniqueName => Object.hasOwn(BAND_FIELDS, text);

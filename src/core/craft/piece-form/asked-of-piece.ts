@@ -1,5 +1,5 @@
 /** What is asked once for the whole piece, group by group as the form shows it. */
-import { DEFAULT_ALLOWANCES, NAIL_DIAMETER_MM, TIE_MM } from '#core/craft/defaults.ts';
+import { DEFAULT_ALLOWANCES, FRINGE_BUNDLE_ENDS, NAIL_DIAMETER_MM, TIE_MM } from '#core/craft/defaults.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import type { LoomKindName } from '#core/craft/piece.ts';
 import { option, type Asked, type Option } from './asked.ts';
@@ -82,6 +82,33 @@ export const HANGING: readonly Asked[] = [
   { key: 'dowel.lengthMm', kind: 'length', label: 'Its length', called: 'Length of the dowel', otherwise: 'reckoned from the width' },
 ];
 
+export const FIXING: Asked = {
+  key: 'dowel.fixing', kind: 'choice', label: 'Held to the dowel',
+  options: [option('slipped', 'Warp loops slipped on'), option('tied', 'Warp loops tied to it'), option('lashed', 'Lashed on with yarn')],
+};
+
+/** What becomes of the lower warp ends; nothing chosen leaves it open. */
+export const FINISH: Asked = {
+  key: 'finish.bottom', kind: 'choice', label: 'Lower warp ends',
+  options: [
+    { text: '', value: '', label: 'Left open here' },
+    option('knotted', 'Knotted in bundles'),
+    option('twisted', 'Twisted into cords'),
+    option('tucked', 'Tucked back into the cloth'),
+    option('plain', 'Left as they are, or cut'),
+  ],
+};
+export const FRINGE: readonly Asked[] = [
+  { key: 'finish.fringeMm', kind: 'length', label: 'Fringe', called: 'Length of the fringe', otherwise: 'none' },
+  { key: 'finish.bundleEnds', kind: 'number', label: 'Ends in a bundle', unit: 'ends', standard: () => FRINGE_BUNDLE_ENDS },
+];
+/** What the chosen finish has of these. */
+export function fringeAsked(texts: Texts): readonly Asked[] {
+  const bottom = textOf(texts, FINISH.key);
+  if (bottom === '' || bottom === 'tucked') return [];
+  return bottom === 'plain' ? FRINGE.slice(0, 1) : FRINGE;
+}
+
 export const HANGS: Asked = {
   key: 'hangs', kind: 'choice', label: 'It hangs',
   options: [option('as-woven', 'As it was woven'), option('turned', 'Turned, first rows at the top')],
@@ -106,6 +133,6 @@ export const ALLOWANCES: readonly Asked[] = [
 
 /** All of them but the beat, which is two values of which one is given. */
 export const ASKED_ONCE: readonly Asked[] = [
-  ...SIZE, LOOM_KIND, ...LOOM, NAIL_ROWS, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...HANGING, HANGS, SEED, ...ALLOWANCES,
+  ...SIZE, LOOM_KIND, ...LOOM, NAIL_ROWS, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...HANGING, FIXING, FINISH, ...FRINGE, HANGS, SEED, ...ALLOWANCES,
 ];
 export const BEAT_FIELDS: readonly Asked[] = [BEAT_BY, OWN_BEAT, SWATCH_BEAT];

@@ -4,7 +4,7 @@ import { texFromWraps } from '#core/craft/yarn/diameter.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 import { BAND_NAME, bandFields, FILL_KEY, SHAPE, shapeFields, TECHNIQUE } from './asked-of-band.ts';
-import { ASKED_ONCE, BEAT_BY, FIRMNESS, HANGING, hasTwoRows, NAIL_ROWS, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
+import { ASKED_ONCE, BEAT_BY, FIRMNESS, FIXING, FRINGE, fringeAsked, HANGING, hasTwoRows, NAIL_ROWS, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
 import { ASHENHURST, BALL, BY, gristAsked, ROLE, WRAPS, YARN_TRAITS } from './asked-of-yarn.ts';
 import { missingSays, readText, type ReadText } from './field-text.ts';
 import { textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } from './typed-piece.ts';
@@ -156,11 +156,18 @@ function readBeat(reading: Reading, texts: Texts): Group {
   return picks === undefined ? {} : { [by === 'swatch' ? 'picksPerCm' : 'picksPerWeftDiameter']: picks };
 }
 
+/** Some fields belong to a choice that is made in others. */
+function isAsked(asked: Asked, texts: Texts): boolean {
+  if (asked === NAIL_ROWS) return hasTwoRows(texts);
+  if (asked === FIXING) return textOf(texts, 'dowel.diameterMm').trim() !== '';
+  return !FRINGE.includes(asked) || fringeAsked(texts).includes(asked);
+}
+
 /** The piece these texts describe. What is empty and not needed is left to the reckoning's own defaults. */
 export function readTyped({ units, texts, warpYarn, yarns: rows, bands }: TypedPiece): ReadTyped {
   const reading = new Reading(units);
   const piece: Group = { craft: 'frame-loom', size: {}, loom: {}, warp: {} };
-  const askedOnce = ASKED_ONCE.filter((asked) => asked !== NAIL_ROWS || hasTwoRows(texts));
+  const askedOnce = ASKED_ONCE.filter((asked) => isAsked(asked, texts));
   reading.fill(piece, texts, [...askedOnce, ...together(texts, HANGING, 'dowel.diameterMm')], '');
   putAt(piece, 'warp.yarn', readYarn(reading, warpYarn, 'warp.yarn.', ASHENHURST_K.warp));
   piece['beat'] = readBeat(reading, texts);

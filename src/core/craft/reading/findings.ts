@@ -35,6 +35,7 @@ export type WarningCode =
   | 'W_PLAIN_END'
   | 'W_SHORT_STITCH'
   | 'W_SLIT'
+  | 'W_FRINGE'
   | 'W_TIGHT'
   | 'W_SHORT'
   | 'W_ROOM'

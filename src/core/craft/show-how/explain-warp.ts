@@ -5,7 +5,8 @@ import { endsFor } from '#core/craft/ends.ts';
 import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import type { Loom } from '#core/craft/piece.ts';
 import { layoutOf } from '#core/craft/frame-loom/room.ts';
-import { topForDowel } from '#core/craft/loom-height.ts';
+import { finishRoom } from '#core/craft/frame-loom/room.ts';
+import { topForDowel, topForHanging } from '#core/craft/loom-height.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 import { noteThread, type ThreadWorkings } from '#core/craft/show-how/explain-thread.ts';
 import { from, given, standing, sumOf, WEIGHS_NOTHING } from '#core/craft/show-how/notebook.ts';
@@ -109,7 +110,7 @@ function noteNails({ book, piece }: OnLoom, count: Working, { pitch, perMm }: Na
 
 /** Answers the working of the unwoven warp at the bottom. */
 function noteHeight(of: OnLoom): Working {
-  const { book, piece: { size, loom, hanging: { dowel }, height } } = of;
+  const { book, piece: { size, loom, warp, edges: { dowel, finish }, height } } = of;
   const finished = given({ symbol: 'H', name: 'height of the cloth', value: size.heightMm, unit: 'mm' }, '/size/heightMm', 'counted');
   const onLoom = book.note({
     id: 'loom.heightOnLoomMm', name: 'height of the cloth on the loom', formula: 'H / ((1 - lambda) * (1 - sigma))',
@@ -117,7 +118,9 @@ function noteHeight(of: OnLoom): Working {
   });
   const least = standing({ symbol: 'c', name: 'room for the last shed', value: loomKind(loom).leastBareMm.top, unit: 'mm' }, DEFAULTS.topMm, WEIGHS_NOTHING);
   const top = [setting(of, 'a', 'topMm', WEIGHS_NOTHING), least];
-  if (dowel !== undefined) {
+  if (dowel !== undefined && dowel.fixing === 'tied') {
+    top.push(standing({ symbol: 't', name: 'warp to tie to the dowel', value: topForHanging(dowel), unit: 'mm' }, DEFAULTS.topMm, WEIGHS_NOTHING));
+  } else if (dowel !== undefined && dowel.fixing !== 'lashed') {
     const thick = given({ symbol: 'd', name: 'thickness of the dowel', value: dowel.diameterMm, unit: 'mm' }, '/dowel/diameterMm', 'measured');
     const seat = standing({ symbol: 's', name: 'seat of the loops', value: HANGING.seatMm, unit: 'mm' }, DEFAULTS.seat, WEIGHS_NOTHING);
     top.push(from('t', book.note({
@@ -128,8 +131,10 @@ function noteHeight(of: OnLoom): Working {
     id: 'loom.topMm', name: 'unwoven warp at the top', formula: `max(${top.map(({ symbol }) => symbol).join(', ')})`, inputs: top, value: height.topMm, unit: 'mm', ...RULES.loom,
   });
   const knots = standing({ symbol: 'c', name: 'enough to knot or tuck the ends', value: loomKind(loom).leastBareMm.bottom, unit: 'mm' }, DEFAULTS.bottomMm, WEIGHS_NOTHING);
+  const asked = [setting(of, 'a', 'bottomMm', WEIGHS_NOTHING), knots];
+  if (finish !== undefined) asked.push(standing({ symbol: 'f', name: 'warp the finish takes', value: finishRoom(warp, finish), unit: 'mm' }, DEFAULTS.bottomMm, WEIGHS_NOTHING));
   const bottom = book.note({
-    id: 'loom.bottomMm', name: 'unwoven warp at the bottom', formula: 'max(a, c)', inputs: [setting(of, 'a', 'bottomMm', WEIGHS_NOTHING), knots], value: height.bottomMm, unit: 'mm', ...RULES.loom,
+    id: 'loom.bottomMm', name: 'unwoven warp at the bottom', formula: `max(${asked.map(({ symbol }) => symbol).join(', ')})`, inputs: asked, value: height.bottomMm, unit: 'mm', ...RULES.loom,
   });
   const parts = [from('l', onLoom), from('t', topUsed), from('b', bottom)];
   book.note({ id: 'loom.heightNeededMm', name: 'from nail to nail upright, at least', formula: sumOf(parts), inputs: parts, value: height.heightNeededMm, unit: 'mm', ...RULES.arithmetic });

@@ -68,7 +68,7 @@ function noteWave({ book, piece }: OnLoom, warp: WarpWorkings, { prefix, geometr
 
 function notePicks(of: OnLoom, role: string, prefix: string, warp: WarpWorkings, thread: ThreadWorkings, spacing: Working): PickWorkings {
   const { book, piece } = of;
-  const geometry = picksOn(piece.laid, role);
+  const geometry = picksOn(piece.laid, { role });
   const sum = book.note({
     id: `${prefix}diameterSumMm`, name: 'warp and weft together', formula: 'd1 + d2', inputs: [from('d1', warp.workingDiameter), from('d2', thread.compressed)],
     value: geometry.diameterSumMm, unit: 'mm', ...RULES.arithmetic,
@@ -93,7 +93,7 @@ function notePicks(of: OnLoom, role: string, prefix: string, warp: WarpWorkings,
 /** Both diameters of every yarn, and one pick of each that is woven in picks. */
 export function noteWeft(of: OnLoom, bands: readonly WovenBand[], warp: WarpWorkings): WeftWorkings {
   const { book, piece } = of;
-  const main = mainWeft(bands, piece.laid).role;
+  const main = mainWeft(bands, piece.laid).geometry.pick.role;
   const threads = new Map<string, ThreadWorkings>();
   const picks = new Map<string, PickWorkings>();
   const spacings = new Map<string, Working>();

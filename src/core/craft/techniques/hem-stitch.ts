@@ -74,8 +74,14 @@ function weave(band: HemStitchBand, _heightMm: number, loom: DressedLoom): Woven
 
 /** Sewn into the cloth's edge, it adds no height. */
 export const hemStitch: Technique<'hem-stitch'> = {
+  words: {
+    label: 'Hem-stitch',
+    how: 'The needle goes behind a bundle of ends, round it, behind it again and up into the cloth.',
+    tools: ['blunt needle'],
+    cautions: ['Leave a tail four times the width before you begin: it cannot be lengthened.', 'Sew while the warp is still tight on the loom.'],
+  },
   read,
-  roles: (band) => [{ key: 'yarn', role: band.yarn, inPicks: false }],
+  roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: () => 0,
   check,
   weave,

@@ -3,7 +3,7 @@ import type { LoopPileBand, LoopSize } from '#core/craft/piece.ts';
 import { pickLength } from '#core/craft/picks.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { BAND_HEIGHT, readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
-import { picksOn, rowsOf, threadOn, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+import { pickKey, picksOn, rowsOf, threadOn, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
 
 /** Weft of one loop: round a rod and pinched at its foot, or twice the height it is drawn to. */
 export function loopLength(size: LoopSize, loftMm: number): number {
@@ -34,10 +34,10 @@ function readSize(fields: Fields): LoopSize {
 function weave(band: LoopPileBand, _heightMm: number, loom: DressedLoom): Woven {
   const thread = threadOn(loom, band.yarn);
   const loops = loopsPerRow(loom.workingEnds);
-  const rowMm = loopRow(pickLength(loom.workingEnds, picksOn(loom, band.yarn)), loops, loopLength(band, thread.loftMm));
+  const rowMm = loopRow(pickLength(loom.workingEnds, picksOn(loom, { role: band.yarn })), loops, loopLength(band, thread.loftMm));
   const stitches = band.rows * loops;
   return {
-    picks: { role: band.yarn, rows: band.rows, rawRows: band.rows },
+    picks: { key: pickKey({ role: band.yarn }), rows: band.rows, rawRows: band.rows },
     counts: { picks: band.rows, stitches },
     uses: [rowsOf(band.yarn, 'shuttle', band.rows, rowMm, thread)],
     work: { rows: band.rows, stitches },
@@ -45,6 +45,12 @@ function weave(band: LoopPileBand, _heightMm: number, loom: DressedLoom): Woven 
 }
 
 export const loopPile: Technique<'loop-pile'> = {
+  words: {
+    label: 'Loop pile',
+    how: 'A row of tabby is laid loosely, and drawn up between the ends into loops, over a rod or by hand.',
+    tools: ['rod, for loops all alike', 'comb'],
+    cautions: ['Leave the rod in until the next row is beaten down.', 'Weave two rows of tabby after it, or a pull at one loop draws out its neighbours.'],
+  },
   read: (fields) => ({
     technique: 'loop-pile',
     ...readName(fields),
@@ -53,7 +59,7 @@ export const loopPile: Technique<'loop-pile'> = {
     rows: fields.number('rows', ROWS),
     heightMm: fields.number('heightMm', BAND_HEIGHT),
   }),
-  roles: (band) => [{ key: 'yarn', role: band.yarn, inPicks: true }],
+  roles: (band) => [{ key: 'yarn', role: band.yarn, picks: { role: band.yarn } }],
   height: (band) => band.heightMm,
   check: () => undefined,
   weave,

@@ -67,8 +67,14 @@ function weave(band: RovingBand, _heightMm: number, loom: DressedLoom): Woven {
 }
 
 export const roving: Technique<'roving'> = {
+  words: {
+    label: 'Roving',
+    how: 'Unspun fibre goes over some ends and under as many, and is puffed up where it lies on the face.',
+    tools: [],
+    cautions: ['Tear it to length, do not cut it: torn ends vanish in the cloth.', 'Weave firm tabby on both sides of it, or it slides.'],
+  },
   read,
-  roles: (band) => [{ key: 'yarn', role: band.yarn, inPicks: false }],
+  roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: (band) => band.heightMm,
   check,
   weave,

@@ -1,6 +1,7 @@
 /** Rya: cut strands knotted round two legs of ends, hanging as a fringe or pile. */
 import type { RyaBand } from '#core/craft/piece.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
+import { present } from '#core/craft/reading/present.ts';
 import { roundUpTo } from '#core/craft/rounding.ts';
 import { BAND_HEIGHT, LONGEST_MM, readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
 import { threadOn, type BandReport, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
@@ -50,6 +51,7 @@ export function windingCard(cutMm: number, thicknessMm: number): { readonly exac
 
 export const STRANDS_IN_KNOT: NumberRule = { name: 'Strands in a knot', min: 1, max: 100, whole: true };
 export const LEG_ENDS: NumberRule = { name: 'Ends in each leg', min: 1, max: 100, whole: true };
+export const EDGE_ENDS: NumberRule = { name: 'Plain ends at each selvedge', min: 0, max: 100, whole: true };
 export const PILE: NumberRule = { name: 'Length of the pile', min: 'over-zero', max: LONGEST_MM, unit: 'mm' };
 export const TRIM: NumberRule = { name: 'Length to trim away', min: 0, max: 1000, unit: 'mm' };
 
@@ -60,6 +62,7 @@ function read(fields: Fields): RyaBand {
     yarn: readRole(fields),
     strands: fields.number('strands', STRANDS_IN_KNOT),
     legEnds: fields.number('legEnds', LEG_ENDS),
+    ...present({ edgeEnds: fields.optionalNumber('edgeEnds', EDGE_ENDS) }),
     pileMm: fields.number('pileMm', PILE),
     trimMm: fields.number('trimMm', TRIM),
     rows: fields.number('rows', ROWS),
@@ -69,11 +72,16 @@ function read(fields: Fields): RyaBand {
 
 function check(band: RyaBand, _heightMm: number, loom: DressedLoom, report: BandReport): void {
   const knotEnds = 2 * band.legEnds;
+  const ends = loom.workingEnds - 2 * (band.edgeEnds ?? 0);
+  if (knotEnds <= loom.workingEnds && knotEnds > ends) {
+    report.reject('E_FIT', 'edgeEnds', `One knot needs ${String(knotEnds)} ends, and ${String(Math.max(0, ends))} are left between the plain ones. Leave fewer plain.`);
+    return;
+  }
   if (knotEnds > loom.workingEnds) {
     report.reject('E_FIT', 'legEnds', `One knot needs ${String(knotEnds)} ends, and the warp has ${String(loom.workingEnds)}. Take fewer in each leg.`);
     return;
   }
-  const plain = loom.workingEnds % knotEnds;
+  const plain = ends % knotEnds;
   if (plain > 0) {
     const left = plain === 1 ? 'One end stays' : `${String(plain)} ends stay`;
     report.warn('W_PLAIN_END', 'legEnds', `${left} without a knot in each row. Share that between both selvedges, or ask for an even number of ends.`);
@@ -81,7 +89,7 @@ function check(band: RyaBand, _heightMm: number, loom: DressedLoom, report: Band
 }
 
 function weave(band: RyaBand, _heightMm: number, loom: DressedLoom): Woven {
-  const knots = band.rows * ryaKnotsPerRow(loom.workingEnds, 0, band.legEnds);
+  const knots = band.rows * ryaKnotsPerRow(loom.workingEnds, band.edgeEnds ?? 0, band.legEnds);
   const strands = knots * band.strands;
   const cutMm = ryaCutLength({
     ...band,
@@ -98,8 +106,14 @@ function weave(band: RyaBand, _heightMm: number, loom: DressedLoom): Woven {
 
 /** The band counts its own strands, so the number the yarn is otherwise taken together in does not matter here. */
 export const rya: Technique<'rya'> = {
+  words: {
+    label: 'Rya fringe',
+    how: 'Cut strands are laid over two ends, drawn out between them from behind, and pulled down to the row.',
+    tools: ['card to wind the strands on', 'scissors', 'comb'],
+    cautions: ['Pull both ends of a knot down together, or it sits askew.', 'Weave a row or two of tabby after each row of knots: they hold nothing by themselves.', 'Long fringe is a danger to small children: hang it out of their reach.'],
+  },
   read,
-  roles: (band) => [{ key: 'yarn', role: band.yarn, inPicks: false }],
+  roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: (band) => band.heightMm,
   check,
   weave,

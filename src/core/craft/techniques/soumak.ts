@@ -7,6 +7,7 @@ import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
 import {
   loftSum,
+  pickKey,
   picksOn,
   pickSpacingOn,
   threadOn,
@@ -111,9 +112,9 @@ function weave(band: SoumakBand, _heightMm: number, loom: DressedLoom): Woven {
   const picks = tabbyPicks(band);
   if (picks === 0) return { counts: { stitches }, uses: [soumak], work: { stitches } };
   const ground = threadOn(loom, band.tabbyYarn);
-  const pickMm = pickLength(loom.workingEnds, picksOn(loom, band.tabbyYarn));
+  const pickMm = pickLength(loom.workingEnds, picksOn(loom, { role: band.tabbyYarn }));
   return {
-    picks: { role: band.tabbyYarn, rows: picks, rawRows: picks },
+    picks: { key: pickKey({ role: band.tabbyYarn }), rows: picks, rawRows: picks },
     counts: { picks, stitches },
     uses: [soumak, rowsOf(band.tabbyYarn, 'shuttle', picks, pickMm, ground)],
     work: { rows: picks, stitches },
@@ -121,10 +122,16 @@ function weave(band: SoumakBand, _heightMm: number, loom: DressedLoom): Woven {
 }
 
 export const soumak: Technique<'soumak'> = {
+  words: {
+    label: 'Soumak',
+    how: 'The weft goes over some ends and back under fewer, and so wraps its way along the row in a ridge.',
+    tools: ['blunt needle', 'comb'],
+    cautions: ['Wrapped tightly it draws the cloth in: let each stitch lie round its ends without pulling.', 'A row or two of tabby between ridges holds them.'],
+  },
   read,
   roles: (band) => [
-    { key: 'yarn', role: band.yarn, inPicks: false },
-    { key: 'tabbyYarn', role: band.tabbyYarn, inPicks: tabbyPicks(band) > 0 },
+    { key: 'yarn', role: band.yarn },
+    { key: 'tabbyYarn', role: band.tabbyYarn, ...(tabbyPicks(band) > 0 ? { picks: { role: band.tabbyYarn } } : {}) },
   ],
   height,
   check,

@@ -5,6 +5,7 @@ import type { BandHeight, Shape, TabbyBand } from '#core/craft/piece.ts';
 import { boxOfPoints, climbOfPoints } from '#core/craft/points-shape.ts';
 import { picksInHeight, pickLength } from '#core/craft/picks.ts';
 import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
+import { present } from '#core/craft/reading/present.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import { heightKeyOf, heightOfShape, rowsOfShape, widthKeyOf, widthOfShape } from '#core/craft/shapes.ts';
 import {
@@ -17,8 +18,23 @@ import {
 } from '#core/craft/techniques/colour-rows.ts';
 import { LONGEST_MM, readName, readRole } from '#core/craft/techniques/read-rules.ts';
 import { readShape } from '#core/craft/techniques/read-shape.ts';
-import { picksOn, threadOn, type BandReport, type DressedLoom, type Technique, type Woven, type YarnUse } from '#core/craft/techniques/technique.ts';
+import {
+  pickKey,
+  picksOn,
+  threadInPicks,
+  type BandReport,
+  type DressedLoom,
+  type LaidPicks,
+  type PickOf,
+  type Technique,
+  type Woven,
+  type YarnUse,
+} from '#core/craft/techniques/technique.ts';
+import { STRANDS } from '#core/craft/yarn/read-yarn.ts';
+import type { Thread } from '#core/craft/yarn/thread.ts';
 
+/** In basket weave two ends are met by two strands, unless the band takes another number. */
+const BASKET_STRANDS = 2;
 const MOST_SHAPES = 24;
 /** Nobody weaves more in one band; a finer beat than the yarn has was most likely mistyped. */
 const MOST_ROWS = 20_000;
@@ -47,12 +63,25 @@ function readShapes(fields: Fields): { readonly shapes?: readonly Shape[] } {
 }
 
 function read(fields: Fields): TabbyBand {
-  return { technique: 'tabby', ...readName(fields), yarn: readRole(fields), ...readHeight(fields), ...readShapes(fields) };
+  return {
+    technique: 'tabby',
+    ...readName(fields),
+    yarn: readRole(fields),
+    ...present({ strands: fields.optionalNumber('strands', STRANDS), basket: fields.optionalFlag('basket', 'Basket weave') }),
+    ...readHeight(fields),
+    ...readShapes(fields),
+  };
+}
+
+/** How a yarn of this band, the ground or a shape's, lies in its rows. */
+function pickIn({ strands, basket }: TabbyBand, role: string): PickOf {
+  const together = strands ?? (basket === true ? BASKET_STRANDS : undefined);
+  return { role, ...present({ strands: together }), ...(basket === true ? { pairs: true as const } : {}) };
 }
 
 function gridOf(band: TabbyBand, heightMm: number, loom: DressedLoom): BandGrid {
-  const { pickSpacingMm } = picksOn(loom, band.yarn);
-  return { rows: picksInHeight(heightMm, pickSpacingMm), ends: loom.workingEnds, spacingMm: loom.spacingMm, pickSpacingMm, widthMm: loom.widthMm };
+  const { pickSpacingMm, workingEnds, spacingMm } = picksOn(loom, pickIn(band, band.yarn));
+  return { rows: picksInHeight(heightMm, pickSpacingMm), ends: workingEnds, spacingMm, pickSpacingMm, widthMm: loom.widthMm };
 }
 
 /** Half an end beyond the selvedge is still inside: ends are whole. */
@@ -124,7 +153,7 @@ function check(band: TabbyBand, heightMm: number, loom: DressedLoom, report: Ban
 }
 
 function shapeRows(band: TabbyBand, loom: DressedLoom): number {
-  const { pickSpacingMm } = picksOn(loom, band.yarn);
+  const { pickSpacingMm } = picksOn(loom, pickIn(band, band.yarn));
   return (band.shapes ?? []).reduce((sum, shape) => sum + (shape.shape === 'points' ? picksInHeight(climbOfPoints(shape.points), pickSpacingMm) : rowsOfShape(shape, pickSpacingMm)), 0);
 }
 
@@ -135,31 +164,47 @@ function rowsWithShapes(shapes: readonly PlacedShape[], rows: number): { readonl
   return { first, end };
 }
 
+interface Lying {
+  readonly picks: LaidPicks;
+  readonly thread: Thread;
+}
+
+/** How each yarn lies in this band, looked up once: a band may have thousands of rows. */
+function lyingIn(band: TabbyBand, loom: DressedLoom): (role: string) => Lying {
+  const known = new Map<string, Lying>();
+  return (role) => {
+    const found = known.get(role) ?? { picks: picksOn(loom, pickIn(band, role)), thread: threadInPicks(loom, pickIn(band, role)) };
+    known.set(role, found);
+    return found;
+  };
+}
+
 function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0): Woven {
   const grid = gridOf(band, heightMm, loom);
   const shapes = (band.shapes ?? []).map((shape) => placeShape(shape, grid));
   const standing = rowsWithShapes(shapes, grid.rows);
   const [first, end] = [Math.max(fromRow, standing.first), Math.max(fromRow, standing.end)];
   const rows = Math.max(0, grid.rows - fromRow);
-  const pickMm = (role: string): number => pickLength(loom.workingEnds, picksOn(loom, role));
+  const lying = lyingIn(band, loom);
+  const pickMm = (role: string): number => pickLength(grid.ends, lying(role).picks);
   const threadMm = new Map([[band.yarn, (rows - (end - first)) * pickMm(band.yarn)]]);
   let colourChanges = 0;
   for (let row = first; row < end; row += 1) {
     const areas = areasOfRow(row, band.yarn, shapes, grid.ends);
     colourChanges += areas.length - 1;
     for (const area of areas) {
-      const areaMm = areaLength(area, picksOn(loom, area.yarn), threadOn(loom, area.yarn).compressedMm);
+      const areaMm = areaLength(area, lying(area.yarn).picks, lying(area.yarn).thread.compressedMm);
       threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + areaMm);
     }
   }
   return {
-    picks: { role: band.yarn, rows, rawRows: Math.max(0, heightMm / grid.pickSpacingMm - fromRow) },
+    picks: { key: pickKey(pickIn(band, band.yarn)), rows, rawRows: Math.max(0, heightMm / grid.pickSpacingMm - fromRow) },
     counts: { picks: rows },
     uses: [...threadMm].map(([role, mm]): YarnUse => ({
       role,
       carry: 'shuttle',
       threadMm: mm,
-      yarnMm: mm * threadOn(loom, role).strands,
+      yarnMm: mm * lying(role).thread.strands,
       rowMm: pickMm(role),
     })),
     work: { rows, colourChanges },
@@ -167,11 +212,21 @@ function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0
 }
 
 export const tabby: Technique<'tabby'> = {
+  words: {
+    label: 'Tabby',
+    how: 'The weft goes over one end and under the next, and the other way round in the row that follows.',
+    tools: ['shuttle or butterfly', 'comb'],
+    cautions: [
+      'Lay each row in a hill before you beat it down, or the edges draw in.',
+      'Where colours meet at the same end for more than two centimetres, sew the slit or join them.',
+    ],
+  },
   read,
   roles: (band) => [
-    { key: 'yarn', role: band.yarn, inPicks: true },
-    ...(band.shapes ?? []).map((shape, index) => ({ key: `shapes/${String(index)}/yarn`, role: shape.yarn, inPicks: true })),
+    { key: 'yarn', role: band.yarn, picks: pickIn(band, band.yarn) },
+    ...(band.shapes ?? []).map((shape, index) => ({ key: `shapes/${String(index)}/yarn`, role: shape.yarn, picks: pickIn(band, shape.yarn) })),
   ],
+  needsEvenEnds: (band) => band.basket === true,
   height: (band) => (band.fill === true ? 'fill' : band.heightMm),
   shapeRows,
   check,

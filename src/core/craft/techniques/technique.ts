@@ -8,7 +8,7 @@ import { pickSpacing, type PickGeometry } from '#core/craft/picks.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import type { ErrorCode, WarningCode } from '#core/craft/reading/findings.ts';
 import type { Work } from '#core/craft/time.ts';
-import type { Thread } from '#core/craft/yarn/thread.ts';
+import { withStrands, type Thread } from '#core/craft/yarn/thread.ts';
 
 /** The dressed loom, as far as weaving needs to know it. */
 export interface DressedLoom {
@@ -23,8 +23,8 @@ export interface DressedLoom {
   readonly tailMm: number;
   /** By yarn role. */
   readonly threads: ReadonlyMap<string, Thread>;
-  /** By yarn role, where picks of that yarn can be woven at all. */
-  readonly picks: ReadonlyMap<string, PickGeometry>;
+  /** By `pickKey`, where such picks can be woven at all. */
+  readonly picks: ReadonlyMap<string, LaidPicks>;
 }
 
 /**
@@ -44,9 +44,33 @@ export interface YarnUse {
   readonly rowMm?: number;
 }
 
+/** A yarn as it lies in the picks of a band. */
+export interface PickOf {
+  readonly role: string;
+  /** Strands in a row, where not as many as the yarn is taken together otherwise. */
+  readonly strands?: number;
+  /** Over and under two working ends at a time. */
+  readonly pairs?: true;
+}
+
+/** Picks on this loom. */
+export interface LaidPicks extends PickGeometry {
+  readonly pick: PickOf;
+  /** Ends the weft meets: half the loom's in basket weave. */
+  readonly workingEnds: number;
+  /** Between them. */
+  readonly spacingMm: number;
+}
+
+/** The name under which such picks are laid. */
+export function pickKey({ role, strands, pairs }: PickOf): string {
+  return [role, ...(strands === undefined ? [] : [`${String(strands)} strands`]), ...(pairs === true ? ['pairs'] : [])].join(', ');
+}
+
 /** Rows of tabby with one ground yarn. */
 export interface PickRun {
-  readonly role: string;
+  /** Its `pickKey`. */
+  readonly key: string;
   readonly rows: number;
   /** Before rounding to whole rows. */
   readonly rawRows: number;
@@ -78,14 +102,29 @@ export interface BandReport {
 export interface NamedRole {
   readonly key: string;
   readonly role: string;
-  /** Picks of it are woven, so it must close between the ends. */
-  readonly inPicks: boolean;
+  /** Picks of it are woven so, and must close between the ends; missing where none are. */
+  readonly picks?: PickOf;
+}
+
+/** What a person is told of a technique. */
+export interface TechniqueWords {
+  /** In a list of choices. */
+  readonly label: string;
+  /** What the hand does, in a sentence. */
+  readonly how: string;
+  /** Beside loom and needle; none where those are enough. */
+  readonly tools: readonly string[];
+  /** What goes wrong, and what to do. */
+  readonly cautions: readonly string[];
 }
 
 export interface Technique<N extends TechniqueName> {
+  readonly words: TechniqueWords;
   /** Reads its band; keys that nobody read are refused by the caller. */
   read(fields: Fields): BandByTechnique[N];
   roles(band: BandByTechnique[N]): readonly NamedRole[];
+  /** Whether the band asks for an even number of working ends; missing where no band of it does. */
+  needsEvenEnds?(band: BandByTechnique[N]): boolean;
   height(band: BandByTechnique[N], loom: DressedLoom): number | 'fill';
   /** Rows in which its shapes are stepped out, which is what reckoning a large piece takes its time for. */
   shapeRows?(band: BandByTechnique[N], loom: DressedLoom): number;
@@ -101,10 +140,17 @@ export function threadOn(loom: DressedLoom, role: string): Thread {
   return thread;
 }
 
-/** @throws if picks of that yarn jam, which must have been refused before */
-export function picksOn(loom: DressedLoom, role: string): PickGeometry {
-  const geometry = loom.picks.get(role);
-  if (geometry === undefined) throw new Error(`no picks of the yarn ${role}`);
+/** The yarn with as many strands as lie in these picks. */
+export function threadInPicks(loom: DressedLoom, pick: PickOf): Thread {
+  const thread = threadOn(loom, pick.role);
+  return pick.strands === undefined ? thread : withStrands(thread, pick.strands);
+}
+
+/** @throws if such picks jam, which must have been refused before */
+export function picksOn(loom: DressedLoom, pick: PickOf): LaidPicks {
+  const key = pickKey(pick);
+  const geometry = loom.picks.get(key);
+  if (geometry === undefined) throw new Error(`no picks of the yarn ${key}`);
   return geometry;
 }
 

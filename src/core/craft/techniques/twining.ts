@@ -1,7 +1,12 @@
 /** Weft twining: two strands that cross between every two ends and hold them apart. */
 import type { TwiningBand } from '#core/craft/piece.ts';
+import type { NumberRule } from '#core/craft/reading/fields.ts';
+import { present } from '#core/craft/reading/present.ts';
+import { ceilSafe } from '#core/craft/rounding.ts';
 import { readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
 import { loftSum, rowsOf, threadOn, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+
+const ENDS_PER_TWIST: NumberRule = { name: 'Ends between two crossings', min: 1, max: 100, whole: true };
 
 /**
  * Complete elliptic integral of the second kind, E(m), for 0 ≤ m ≤ 1, by the
@@ -36,11 +41,14 @@ export interface TwinedRow {
   readonly diameterSumMm: number;
   readonly weftMm: number;
   readonly tailMm: number;
+  /** Ends between two crossings. */
+  readonly endsPerTwist: number;
 }
 
 /** Both strands of one row, folded round the first end, with two tails. */
 export function twinedRow(row: TwinedRow): number {
-  const strandMm = (row.ends - 1) * row.spacingMm * twiningRatio(row.spacingMm, row.diameterSumMm, row.weftMm);
+  const twistMm = row.endsPerTwist * row.spacingMm;
+  const strandMm = (row.ends - 1) * row.spacingMm * twiningRatio(twistMm, row.diameterSumMm, row.weftMm);
   const foldMm = (Math.PI * row.diameterSumMm) / 2;
   return 2 * strandMm + foldMm + 2 * row.tailMm;
 }
@@ -53,16 +61,33 @@ function weave(band: TwiningBand, _heightMm: number, loom: DressedLoom): Woven {
     diameterSumMm: loftSum(loom, thread),
     weftMm: thread.loftMm,
     tailMm: loom.tailMm,
+    endsPerTwist: band.endsPerTwist ?? 1,
   });
-  const stitches = band.rows * loom.workingEnds;
+  const stitches = band.rows * ceilSafe(loom.workingEnds / (band.endsPerTwist ?? 1));
   return { counts: { stitches }, uses: [rowsOf(band.yarn, 'by-the-row', band.rows, rowMm, thread)], work: { stitches } };
 }
 
 /** A row is taken to be as high as its yarn lies free, as in soumak. */
 export const twining: Technique<'twining'> = {
-  read: (fields) => ({ technique: 'twining', ...readName(fields), yarn: readRole(fields), rows: fields.number('rows', ROWS) }),
-  roles: (band) => [{ key: 'yarn', role: band.yarn, inPicks: false }],
+  words: {
+    label: 'Twining',
+    how: 'Two strands cross between the ends, so that one lies before each end and one behind it.',
+    tools: ['blunt needle'],
+    cautions: ['Twist always the same way, or the row opens where it turns.', 'Its first row sets the ends: measure their spacing before you go on.'],
+  },
+  read: (fields) => ({
+    technique: 'twining',
+    ...readName(fields),
+    yarn: readRole(fields),
+    rows: fields.number('rows', ROWS),
+    ...present({ endsPerTwist: fields.optionalNumber('endsPerTwist', ENDS_PER_TWIST) }),
+  }),
+  roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: (band, loom) => band.rows * threadOn(loom, band.yarn).loftMm,
-  check: () => undefined,
+  check: (band, _heightMm, loom, report) => {
+    if ((band.endsPerTwist ?? 1) > loom.workingEnds) {
+      report.reject('E_FIT', 'endsPerTwist', `The warp has ${String(loom.workingEnds)} ends to work with. Cross the strands more often.`);
+    }
+  },
   weave,
 };

@@ -14,7 +14,7 @@ const SYSTEM_NAMES = [
 
 const TEX: NumberRule = { name: 'Tex', min: TEX_RANGE.min, max: TEX_RANGE.max, unit: 'tex' };
 const METRES_PER_100G: NumberRule = { name: 'Metres in 100 g', min: 0.5, max: 100_000, unit: 'm' };
-const STRANDS: NumberRule = { name: 'Strands together', min: 1, max: 100, whole: true };
+export const STRANDS: NumberRule = { name: 'Strands together', min: 1, max: 100, whole: true };
 const ASHENHURST: NumberRule = { name: 'Ashenhurst’s K', min: 0.75, max: 1 };
 const WRAPS: NumberRule = { name: 'Wraps in an inch', min: 1, max: 60 };
 const FREE_DIAMETER: NumberRule = { name: 'Thickness, lying free', min: 'over-zero', max: 200, unit: 'mm' };

@@ -88,6 +88,12 @@ export function threadOf(yarn: Yarn, defaultK: number): Thread {
   };
 }
 
+/** The same yarn with another number of strands together. */
+export function withStrands(thread: Thread, strands: number): Thread {
+  const one = Math.sqrt(strands / thread.strands);
+  return { ...thread, strands, compressedMm: thread.compressedMm * one, loftMm: thread.loftMm * one };
+}
+
 /** Mass in grams of this length of one strand. */
 export function massOf(lengthMm: number, tex: number): number {
   return (lengthMm / 1e6) * tex;

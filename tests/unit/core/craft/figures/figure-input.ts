@@ -34,7 +34,7 @@ export const PLAN: Plan = {
   warp: { netMm: 32770, withMarginMm: 36000, massG: 13 },
   yarns: { ground: { netMm: 73915, withMarginMm: 85000, massG: 41, loads: 10, rowsPerLoad: 24 } },
   bands: [band(0, 'hem-stitch', 0, 0), { ...band(1, 'rya', 6, 0), cutMm: 364.28, knots: 31, strands: 93 }, band(2, 'tabby', 120, 83), band(3, 'soumak', 14, 0)],
-  cut: { spacerCard: { widthMm: 325, heightMm: 60 }, dowel: { lengthMm: 380, minDiameterMm: 6.2 }, cordMm: 716 },
+  cut: { spacerCard: { widthMm: 325, heightMm: 60 }, dowel: { lengthMm: 380, minDiameterMm: 6.2 }, fixingHoldsG: 600, cordMm: 716 },
   massG: 109,
   hours: { likely: 6.5, low: 3.9, high: 11.7 },
   warnings: [],

@@ -1,6 +1,6 @@
 /** Pieces of every make, whether or not they could be woven: a form must hold them all. */
 import fc from 'fast-check';
-import type { Allowances, Band, Beat, Piece, Shape, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Beat, Finish, Piece, Shape, Yarn } from '#core/craft/piece.ts';
 import { present } from '#core/craft/reading/present.ts';
 
 /** Lengths as people write them, and as sums and inches leave them behind. */
@@ -47,16 +47,19 @@ const bandOf = (role: fc.Arbitrary<string>): fc.Arbitrary<Band> => {
   const named = perhaps(bandName).map((name) => present({ name }));
   const high = fc.oneof(mm.map((heightMm) => ({ heightMm })), fc.constant({ fill: true } as const));
   const loop = fc.oneof(mm.map((rodMm) => ({ rodMm })), mm.map((loopMm) => ({ loopMm })));
+  const woven = fc.record({ strands: perhaps(count), basket: perhaps(fc.constant(true)) }).map((ways) => present(ways));
+  const edges = perhaps(count).map((edgeEnds) => present({ edgeEnds }));
+  const twists = perhaps(count).map((endsPerTwist) => present({ endsPerTwist }));
   const passes = perhaps(count).map((many) => present({ passes: many }));
   const shapes = fc.array(shapeOf(role), { maxLength: 3 }).map((all) => (all.length === 0 ? {} : { shapes: all }));
   return fc.oneof(
-    fc.tuple(named, role, high, shapes).map(([name, own, height, all]): Band => ({ technique: 'tabby', ...name, yarn: own, ...height, ...all })),
+    fc.tuple(named, role, high, shapes, woven).map(([name, own, height, all, ways]): Band => ({ technique: 'tabby', ...name, yarn: own, ...ways, ...height, ...all })),
     fc.tuple(named, fc.record({ yarn: role, over: count, back: count, rows: count, tabbyBetween: fc.nat(20), tabbyYarn: role })).map(([name, rest]): Band => ({ technique: 'soumak', ...name, ...rest })),
-    fc.tuple(named, fc.record({ yarn: role, strands: count, legEnds: count, pileMm: mm, trimMm: fc.oneof(fc.constant(0), mm), rows: count, heightMm: mm })).map(([name, rest]): Band => ({ technique: 'rya', ...name, ...rest })),
+    fc.tuple(named, fc.record({ yarn: role, strands: count, legEnds: count, pileMm: mm, trimMm: fc.oneof(fc.constant(0), mm), rows: count, heightMm: mm }), edges).map(([name, rest, edge]): Band => ({ technique: 'rya', ...name, ...rest, ...edge })),
     fc.tuple(named, fc.record({ yarn: role, over: count, bulgeMm: mm, heightMm: mm }), passes).map(([name, rest, more]): Band => ({ technique: 'roving', ...name, ...rest, ...more })),
     fc.tuple(named, fc.record({ yarn: role, bundleEnds: count, reachPicks: count })).map(([name, rest]): Band => ({ technique: 'hem-stitch', ...name, ...rest })),
     fc.tuple(named, fc.record({ yarn: role, rows: count, heightMm: mm }), loop).map(([name, rest, size]): Band => ({ technique: 'loop-pile', ...name, ...rest, ...size })),
-    fc.tuple(named, fc.record({ yarn: role, rows: count })).map(([name, rest]): Band => ({ technique: 'twining', ...name, ...rest })),
+    fc.tuple(named, fc.record({ yarn: role, rows: count }), twists).map(([name, rest, twist]): Band => ({ technique: 'twining', ...name, ...rest, ...twist })),
   );
 };
 
@@ -88,9 +91,15 @@ const once = fc.record({
   }).map(({ more, ...warp }) => ({ ...warp, ...present(more) })),
   beat,
 });
+const finish: fc.Arbitrary<Finish> = fc.oneof(
+  fc.constant({ bottom: 'tucked' } as const),
+  perhaps(mm).map((fringeMm) => ({ bottom: 'plain', ...present({ fringeMm }) } as const)),
+  fc.tuple(fc.constantFrom('knotted', 'twisted'), perhaps(mm), perhaps(count)).map(([bottom, fringeMm, bundleEnds]) => ({ bottom, ...present({ fringeMm, bundleEnds }) })),
+);
 const more = fc.record({
   mode: perhaps(fc.constantFrom('straight-warp', 'balanced')), allowances,
-  dowel: perhaps(fc.record({ diameterMm: mm, lengthMm: perhaps(mm) }).map(({ diameterMm, lengthMm }) => ({ diameterMm, ...present({ lengthMm }) }))),
+  dowel: perhaps(fc.record({ diameterMm: mm, lengthMm: perhaps(mm), fixing: perhaps(fc.constantFrom('slipped', 'tied', 'lashed')) }).map(({ diameterMm, ...rest }) => ({ diameterMm, ...present(rest) }))),
+  finish: perhaps(finish),
   hangs: perhaps(fc.constantFrom('as-woven', 'turned')), seed: perhaps(fc.nat()),
 });
 

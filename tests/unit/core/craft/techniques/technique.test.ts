@@ -20,7 +20,7 @@ test('every technique is in the list it is chosen from', () => {
 
 test('weaving with a yarn that was never laid is a programmer’s mistake', () => {
   expect(() => threadOn(BARE_LOOM, 'sky')).toThrow('no yarn in the role sky');
-  expect(() => picksOn(BARE_LOOM, 'sky')).toThrow('no picks of the yarn sky');
+  expect(() => picksOn(BARE_LOOM, { role: 'sky' })).toThrow('no picks of the yarn sky');
 });
 
 describe('colours in a row', () => {
