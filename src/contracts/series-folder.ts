@@ -1,5 +1,6 @@
 /** A series as plain files: what `series.yaml` may hold. The same shape is written when a series leaves the house. */
 import { z } from 'astro/zod';
+import { CRAFT_NAMES } from '#core/craft/crafts.ts';
 
 const words = (most: number) => z.string().trim().min(1).max(most);
 const NAME = /^[a-z0-9-]{1,64}$/;
@@ -26,7 +27,7 @@ export const CheckpointEntry = z.object({ ask: words(200), look: z.array(words(2
 
 export const SeriesFile = z.object({
   title: words(120),
-  craft: z.enum(['frame-loom', 'macrame']),
+  craft: z.enum(CRAFT_NAMES),
   techniques: z.array(words(40)).max(20),
   level: z.enum(['beginner', 'some-practice', 'sure-hand']),
   summary: words(400),

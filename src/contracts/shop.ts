@@ -1,7 +1,7 @@
 /** What a visitor wishes for at the shop front. It comes in an address that anybody may type, so nonsense is no wish. */
 import { z } from 'astro/zod';
+import { CRAFT_NAMES } from '#core/craft/crafts.ts';
 
-export const CRAFTS = ['frame-loom', 'macrame'] as const;
 export const LEVELS = ['beginner', 'some-practice', 'sure-hand'] as const;
 /** Inside widths of a frame, in centimetres; `none` is for who has no loom. */
 export const LOOMS = ['none', '30', '40', '50', '60', '80'] as const;
@@ -14,7 +14,7 @@ const among = <const T extends readonly [string, ...string[]]>(words: T) => z.en
 
 const Wishes = z.object({
   q: z.string().trim().transform((words) => words.slice(0, 80)).optional().catch(undefined),
-  craft: among(CRAFTS),
+  craft: among(CRAFT_NAMES),
   technique: z.string().trim().max(60).optional().catch(undefined),
   loom: among(LOOMS),
   hours: among(HOURS),

@@ -1,5 +1,6 @@
 /** What a teacher writes in her workroom: series, parts, gathering lists. The sentences are what she reads at the field. */
 import { z } from 'astro/zod';
+import { CRAFT_NAMES } from '#core/craft/crafts.ts';
 import type { LessonProblem } from '#core/lesson-text/problem.ts';
 
 const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
@@ -13,10 +14,9 @@ const maybeWords = (most: number) =>
 const wholeNumber = (says: string, least: number, most: number) =>
   z.string({ required_error: says }).trim().regex(/^\d{1,6}$/, says).transform(Number).refine((n) => n >= least && n <= most, says);
 
-export const CRAFTS = ['frame-loom', 'macrame'] as const;
 export const LEVELS = ['beginner', 'some-practice', 'sure-hand'] as const;
 
-export const NewSeriesForm = z.object({ title: words('The title', 120), craft: z.enum(CRAFTS).default('frame-loom') });
+export const NewSeriesForm = z.object({ title: words('The title', 120), craft: z.enum(CRAFT_NAMES).default('frame-loom') });
 export type NewSeriesInput = z.output<typeof NewSeriesForm>;
 
 export const SeriesDetailsForm = z.object({

@@ -3,7 +3,7 @@ import { bench, describe } from 'vitest';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import workedPiece from '../reference/worked-piece.json' with { type: 'json' };
 import { planOf } from '../reference/worked-piece.ts';
 import { wovenPiece } from '../unit/core/craft/cloth/pieces.ts';
@@ -19,7 +19,7 @@ const VIEWS: readonly (readonly [string, ClothView])[] = [
 const MOST_BYTES = 60_000;
 
 const pieces = {
-  'the worked piece': clothPieceOf(workedPiece as Piece, planOf(workedPiece), 'Worked piece'),
+  'the worked piece': clothPieceOf(workedPiece as FrameLoomPiece, planOf(workedPiece), 'Worked piece'),
   'a piece of every technique': wovenPiece(),
 };
 

@@ -1,6 +1,6 @@
 // How long a plan takes: at every key a teacher presses the whole piece is reckoned anew, in the browser and on the server.
 import { bench, describe } from 'vitest';
-import type { Band, Piece, Shape } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece, Shape } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { PLAIN_PIECE } from '../unit/core/craft/a-piece.ts';
 
@@ -14,7 +14,7 @@ const KINDS: readonly Band[] = [
   { technique: 'hem-stitch', yarn: 'ground', bundleEnds: 2, reachPicks: 2 },
 ];
 
-const SIXTY_BANDS: Piece = {
+const SIXTY_BANDS: FrameLoomPiece = {
   ...PLAIN_PIECE,
   size: { widthMm: 600, heightMm: 1_600 },
   loom: { ...PLAIN_PIECE.loom, insideHeightMm: 1_900 },
@@ -30,7 +30,7 @@ const drawn = (baseMm: number, heightMm: number): Shape => ({
 });
 
 /** As many shapes as may be sent, in so many bands of a tapestry. */
-const tapestry = (bands: number, heightMm: number, shapeOf = triangle): Piece => ({
+const tapestry = (bands: number, heightMm: number, shapeOf = triangle): FrameLoomPiece => ({
   ...PLAIN_PIECE,
   size: { widthMm: 300, heightMm: bands * heightMm },
   loom: { ...PLAIN_PIECE.loom, insideHeightMm: 20_000 },
@@ -49,7 +49,7 @@ const LARGEST_SENT = tapestry(199, 100);
 const MANY_BANDS = { ...PLAIN_PIECE, bands: Array.from({ length: 10_000 }, () => PLAIN_PIECE.bands[0]) };
 const MANY_YARNS = { ...PLAIN_PIECE, yarns: Object.fromEntries(Array.from({ length: 10_000 }, (_, n) => [`y${String(n)}`, { tex: 400 }])) };
 const DEEP: unknown = JSON.parse(`${'['.repeat(100_000)}${']'.repeat(100_000)}`);
-const FINEST: Piece = { ...PLAIN_PIECE, size: { widthMm: 3_000, heightMm: 19_000 }, loom: { nailPitchMm: 3, warping: 'zigzag', insideHeightMm: 20_000 }, warp: { yarn: { tex: 20 } }, yarns: { ground: { tex: 1 } } };
+const FINEST: FrameLoomPiece = { ...PLAIN_PIECE, size: { widthMm: 3_000, heightMm: 19_000 }, loom: { nailPitchMm: 3, warping: 'zigzag', insideHeightMm: 20_000 }, warp: { yarn: { tex: 20 } }, yarns: { ground: { tex: 1 } } };
 
 for (const piece of [SIXTY_BANDS, LARGEST_WOVEN, LARGEST_DRAWN]) {
   const planned = planPiece(piece);

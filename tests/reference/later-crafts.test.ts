@@ -5,7 +5,8 @@ import { yarnPerArea } from '#core/craft/crochet/yarn.ts';
 import { agentMass, bathLitres } from '#core/craft/dyeing/bath.ts';
 import { feltingFactor, layoutFor } from '#core/craft/felting/shrinkage.ts';
 import { folkRuleYards, knitYarn } from '#core/craft/knitting/yarn.ts';
-import { foldedCordLength, leastSquareKnot, sectionedCordLength, squareKnotCord, squareKnotsIn } from '#core/craft/macrame/cord.ts';
+import { foldedCordLength, gatheringCord, larksHead, leastHalfHitch, leastSquareKnot, sectionedCordLength, squareKnotCord, squareKnotsIn, texFromDiameter } from '#core/craft/macrame/cord.ts';
+import { planPiece } from '#core/craft/plan.ts';
 import { turnsPerMetre } from '#core/craft/spinning/twist.ts';
 import { expectClose } from './close.ts';
 
@@ -23,6 +24,41 @@ describe('macramé cord', () => {
     expect(leastSquareKnot(3)).toBeLessThan(50);
     expectClose(squareKnotCord(3), 50, 0.05);
     expect(squareKnotsIn(900, 3)).toBe(86);
+  });
+
+  test.each([[1.5, 30], [3, 50], [5, 60]])('cord of %f mm: %f mm a knot are reported (urbaki.com), within what a piece accepts', (cordMm, reported) => {
+    expect(reported / cordMm).toBeGreaterThanOrEqual(11.5);
+    expect(reported / cordMm).toBeLessThanOrEqual(20);
+    expect(reported).toBeGreaterThan(leastSquareKnot(cordMm));
+  });
+
+  test('90 cm of square knots in 3 mm cord: 86 knots, 4.128 m of a working end, 4.59 times the length (path added up; the rule of four gives 3.6 m)', () => {
+    const planned = planPiece({
+      craft: 'macrame', rod: { kind: 'rod', diameterMm: 20 }, yarns: { main: { diameterMm: 3 } },
+      columns: [{ yarn: 'main', cords: 2, sections: [{ technique: 'square-knots', heightMm: 900 }] }],
+    });
+    if (!planned.ok) throw new Error('it can be knotted');
+    const [column] = planned.value.columns;
+    expect(column?.sections[0]).toMatchObject({ knots: 86, workerMm: 4128 });
+    expectClose((column?.sections[0]?.workerMm ?? 0) / 900, 4.587, 1e-3);
+    // Fillers are as long as the knots stand high: 0.9 m, to within half a knot.
+    expect(Math.abs((column?.sections[0]?.fillerMm ?? 0) - 900)).toBeLessThan(3.5 * 3 * 0.5 + 1e-9);
+    expectClose((column?.ruleMm ?? 0) / 2, 3600, 0.01);
+  });
+
+  test('a tight half hitch is one turn round its like, a double one two; a lark’s head goes round rod and cord twice (circles)', () => {
+    expectClose(leastHalfHitch(1), 6.283185, 1e-6);
+    expectClose(2 * leastHalfHitch(1), 12.56637, 1e-6);
+    expectClose(larksHead(20, 3), 2 * Math.PI * 26, 1e-12);
+  });
+
+  test('a gathering knot of one turn is once round its bundle, and its tails (circle)', () => {
+    expectClose(gatheringCord(1, 10, 2, 100), 12 * Math.PI + 4 + 200, 1e-12);
+  });
+
+  test('4 mm of three-strand cotton cord weigh 8 to 10 g a metre (common practice, no source)', () => {
+    expect(texFromDiameter(4)).toBeGreaterThan(8000);
+    expect(texFromDiameter(4)).toBeLessThan(10_000);
   });
 });
 

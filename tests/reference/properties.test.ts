@@ -10,7 +10,7 @@ import { planPiece } from '#core/craft/plan.ts';
 import { ceilSafe, roundHalfUp } from '#core/craft/rounding.ts';
 import { stepShape, trueArea } from '#core/craft/shapes.ts';
 import { COUNT_SYSTEMS, countFromTex, texFromCount } from '#core/craft/yarn/count.ts';
-import type { CountSystem } from '#core/craft/piece.ts';
+import type { CountSystem, FrameLoomPiece } from '#core/craft/piece.ts';
 import { cases } from '../support/random-cases.ts';
 import { planOf, typedInInches } from './worked-piece.ts';
 
@@ -256,7 +256,7 @@ describe('whole pieces', () => {
       fc.property(pieces, between(1, 1.5), (piece, more) => {
         fc.pre(isWoven(piece));
         const yarnOf = (changed: object): number => {
-          const planned = planPiece({ ...piece, ...changed });
+          const planned = planPiece({ ...piece, ...changed } as FrameLoomPiece);
           return planned.ok ? Object.values(planned.value.yarns).reduce((sum, { withMarginMm }) => sum + withMarginMm, planned.value.warp.withMarginMm) : Number.POSITIVE_INFINITY;
         };
         const before = yarnOf({});

@@ -5,8 +5,8 @@
 import { describe, expect, test } from 'vitest';
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { ryaKnot, soumakRow, tabbyRow, twinedRow } from '#core/craft/interlacement/lay.ts';
-import type { Piece, Yarn } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan.ts';
+import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
 import { levelLay, tautLength, turn, wayAlong, type Place, type Rod, type WalkedPass } from './taut-thread.ts';
@@ -42,7 +42,7 @@ const PIECES: readonly Made[] = [
 
 const TAIL = 50;
 
-function pieceOf(made: Made): Piece {
+function pieceOf(made: Made): FrameLoomPiece {
   return {
     craft: 'frame-loom',
     size: { widthMm: made.widthMm, heightMm: 400 },
@@ -61,7 +61,7 @@ function pieceOf(made: Made): Piece {
 }
 
 interface Laid {
-  readonly plan: Plan;
+  readonly plan: FrameLoomPlan;
   readonly last: number;
   readonly xOf: (end: number) => number;
   /** Rods for a thread this thick: two ends worked as one stand side by side, touching. */

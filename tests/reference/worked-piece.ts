@@ -2,9 +2,9 @@
  * The worked piece and every number of its table, reckoned. Lengths are millimetres; the
  * imperial column is the same piece typed in inches and turned into millimetres on entry.
  */
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import type { BandPlan, Plan, YarnPlan } from '#core/craft/plan-types.ts';
+import type { BandPlan, FrameLoomPlan, YarnPlan } from '#core/craft/plan-types.ts';
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { cordTension } from '#core/craft/hanging.ts';
 import { topForDowel } from '#core/craft/loom-height.ts';
@@ -30,8 +30,9 @@ export function typedInInches(value: unknown, key = ''): unknown {
   return key === 'metresPer100g' || key === 'metres' ? (value / METRES_PER_YARD) * METRES_PER_YARD : value;
 }
 
-export function planOf(piece: unknown): Plan {
-  const planned = planPiece(piece);
+/** Of a frame-loom piece, read as one from whatever was handed in. */
+export function planOf(piece: unknown): FrameLoomPlan {
+  const planned = planPiece(piece as FrameLoomPiece);
   if (!planned.ok) throw new Error(JSON.stringify(planned.problems));
   return planned.value;
 }
@@ -47,11 +48,11 @@ interface Yarns {
   readonly C: Thread;
 }
 
-const band = (plan: Plan, index: number): BandPlan => plan.bands[index] ?? { index, technique: 'tabby', heightMm: Number.NaN, yarnMm: {} };
-const yarn = (plan: Plan, role: string): YarnPlan => plan.yarns[role] ?? { netMm: Number.NaN, withMarginMm: Number.NaN, massG: Number.NaN, loads: 0, rowsPerLoad: 0 };
+const band = (plan: FrameLoomPlan, index: number): BandPlan => plan.bands[index] ?? { index, technique: 'tabby', heightMm: Number.NaN, yarnMm: {} };
+const yarn = (plan: FrameLoomPlan, role: string): YarnPlan => plan.yarns[role] ?? { netMm: Number.NaN, withMarginMm: Number.NaN, massG: Number.NaN, loads: 0, rowsPerLoad: 0 };
 const of = (lengths: Readonly<Record<string, number>>, role: string): number => lengths[role] ?? Number.NaN;
 
-function loomRows(piece: Piece, plan: Plan, warp: Thread, { A, B }: Yarns): [string, number][] {
+function loomRows(piece: FrameLoomPiece, plan: FrameLoomPlan, warp: Thread, { A, B }: Yarns): [string, number][] {
   const run = { ends: plan.ends.count, frameHeightMm: piece.loom.insideHeightMm, nailDiameterMm: 1.6, warpDiameterMm: warp.compressedMm, tieMm: 150 };
   const { weft } = plan;
   return [
@@ -89,7 +90,7 @@ function loomRows(piece: Piece, plan: Plan, warp: Thread, { A, B }: Yarns): [str
   ];
 }
 
-function bandRows(plan: Plan, warp: Thread, { A, B, C }: Yarns): [string, number][] {
+function bandRows(plan: FrameLoomPlan, warp: Thread, { A, B, C }: Yarns): [string, number][] {
   const { spacingMm, working } = plan.ends;
   const { pickSpacingMm, pickMm } = plan.weft;
   const triangle = { shape: 'triangle', baseMm: 150, heightMm: 100 } as const;
@@ -152,7 +153,7 @@ function bandRows(plan: Plan, warp: Thread, { A, B, C }: Yarns): [string, number
   ];
 }
 
-function purchaseRows(plan: Plan): [string, number][] {
+function purchaseRows(plan: FrameLoomPlan): [string, number][] {
   const bought: [string, { readonly netMm: number; readonly withMarginMm: number; readonly massG: number; readonly balls?: number }][] = [
     ['71', plan.warp],
     ['72', yarn(plan, 'A')],
@@ -170,7 +171,7 @@ function purchaseRows(plan: Plan): [string, number][] {
   return [...lengthsAndMasses, ...balls];
 }
 
-function hangingRows(plan: Plan): [string, number][] {
+function hangingRows(plan: FrameLoomPlan): [string, number][] {
   const { working, count } = plan.ends;
   const rows = plan.bands.reduce((sum, { picks }) => sum + (picks ?? 0), 0);
   return [
@@ -196,7 +197,7 @@ function hangingRows(plan: Plan): [string, number][] {
 /** Every number of the table by its row. */
 export function columnOf(piece: unknown): Column {
   const plan = planOf(piece);
-  const typed = piece as Piece;
+  const typed = piece as FrameLoomPiece;
   const warp = threadOf(typed.warp.yarn, ASHENHURST_K.warp);
   const thread = (role: string): Thread => threadOf(typed.yarns[role] ?? { tex: Number.NaN }, ASHENHURST_K.weft);
   const yarns = { A: thread('A'), B: thread('B'), C: thread('C') };

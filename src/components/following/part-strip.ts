@@ -1,9 +1,9 @@
 // The strip beside the parts of a series: which bands each part weaves, and how far the student is.
-import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { spreadOverParts, type PartStretch } from '#core/craft/cloth/parts-strip.ts';
+import { wovenOf } from '#core/craft/cloth-of.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
-import { bandsByPart } from '#core/following/bands-by-part.ts';
+import { stretchesOf } from '#core/following/bands-by-part.ts';
 import { howFar } from '#core/following/progress.ts';
 import type { FollowedSeries } from '#server/queries/following/followed-series.ts';
 
@@ -16,10 +16,10 @@ export interface PartStrip {
 /** Null for a series whose piece cannot be drawn. Without a seat all of it is shown woven. */
 export function partStrip({ series, progress, amountKeys }: FollowedSeries, made: MadeFor | null): PartStrip | null {
   if (made === null) return null;
-  const piece = clothPieceOf(made.piece, made.plan, series.title);
-  return {
+  const piece = wovenOf(made.piece, made.plan, series.title);
+  return piece && {
     piece,
-    parts: bandsByPart(made.piece.bands, amountKeys) ?? spreadOverParts(piece, series.parts.length),
+    parts: stretchesOf(made.piece, amountKeys) ?? spreadOverParts(piece, series.parts.length),
     done: series.seat === null ? series.parts.length : howFar(progress).done,
   };
 }

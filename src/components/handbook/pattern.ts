@@ -1,18 +1,20 @@
 /** The piece the handbook takes its examples from, with its plan. */
 import described from '../../../content/series/low-tide/piece.json';
-import type { Piece } from '#core/craft/piece.ts';
-import { planPiece, type Plan } from '#core/craft/plan.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import { planPiece } from '#core/craft/plan.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 
 export interface Pattern {
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
 }
 
 function reckon(data: unknown): Pattern {
-  const plan = planPiece(data);
+  // Our own file, and planning it tells whether it can be woven.
+  const piece = data as FrameLoomPiece;
+  const plan = planPiece(piece);
   if (!plan.ok) throw new Error(plan.problems.map(({ path, message }) => `${path}: ${message}`).join(' '));
-  // Reckoned without a problem, so it has the shape of a piece.
-  return { piece: data as Piece, plan: plan.value };
+  return { piece, plan: plan.value };
 }
 
 export const LOW_TIDE: Pattern = reckon(described);

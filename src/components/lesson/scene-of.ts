@@ -2,8 +2,8 @@
 import type { SeriesMediaFile } from '#contracts/media.ts';
 import { amountOf } from '#core/craft/amounts.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { Piece } from '#core/craft/crafts.ts';
+import type { Plan } from '#core/craft/crafts.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';

@@ -1,7 +1,7 @@
 // Everything a lesson's text needs to be drawn besides its words: amounts in a person's own units, figures drawn with
 // her piece, addresses of media, what she has ticked. The page gathers it; drawing itself asks nobody.
 import type { Chapter, Cue } from '#contracts/media.ts';
-import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
 import type { Trust } from '#core/craft/trust.ts';
 import type { AmountPart } from '#core/units/format-amount.ts';
 
@@ -56,7 +56,7 @@ export interface LessonScene {
   /** By kind. */
   readonly figures: Readonly<Record<string, SceneFigure>>;
   /** What the figures are drawn from, to draw them step by step; absent where there are none. */
-  readonly figuresOf?: FigureInput;
+  readonly figuresOf?: AnyFigureInput;
   /** By the name in the series. */
   readonly pictures: Readonly<Record<string, ScenePicture>>;
   readonly videos: Readonly<Record<string, SceneVideo>>;

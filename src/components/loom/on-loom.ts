@@ -1,10 +1,9 @@
 // A seat as cloth: the piece, how much of it is woven, and where each part lies on it.
-import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { ClothPiece, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { spreadOverParts, type PartStretch } from '#core/craft/cloth/parts-strip.ts';
-import { plainCords } from '#core/craft/cloth/plain-cords.ts';
+import { clothOf } from '#core/craft/cloth-of.ts';
 import { madeFor, type MadeFor } from '#core/craft/made-for.ts';
-import { bandsByPart } from '#core/following/bands-by-part.ts';
+import { stretchesOf } from '#core/following/bands-by-part.ts';
 import { howFar, wovenShare, type HowFar } from '#core/following/progress.ts';
 import { titleHalves } from '#core/series/title.ts';
 import type { Units } from '#core/units/units.ts';
@@ -24,9 +23,9 @@ export function clothOnLoom(seat: SeatOnLoom, units: Units): ClothOnLoom {
   const made = madeFor(seat.pattern, seat.mine, units);
   const far = howFar(seat.parts);
   const { name } = titleHalves(seat.title);
-  if (made === null) return { made, far, piece: seat.craft === 'macrame' ? plainCords(name) : null, woven: far.inHand === undefined ? 1 : 0, stretches: [] };
-  const piece = clothPieceOf(made.piece, made.plan, name);
-  const stretches = bandsByPart(made.piece.bands, seat.parts.map(({ amountKeys }) => amountKeys)) ?? spreadOverParts(piece, seat.parts.length);
+  const piece = made && clothOf(made.piece, made.plan, name);
+  if (made === null || piece?.kind !== 'woven') return { made, far, piece, woven: far.inHand === undefined ? 1 : 0, stretches: [] };
+  const stretches = stretchesOf(made.piece, seat.parts.map(({ amountKeys }) => amountKeys)) ?? spreadOverParts(piece, seat.parts.length);
   const heights = piece.bands.map(({ heightMm }) => heightMm);
   return { made, far, piece, stretches, woven: far.inHand === undefined ? 1 : wovenShare(far.done, stretches, heights) };
 }

@@ -2,8 +2,6 @@
 import { firstName } from '#core/following/opening-words.ts';
 import type { PartFor, SeriesFor } from '#server/queries/series/series-for.ts';
 
-export const CRAFT_WORDS = { 'frame-loom': 'Weaving', macrame: 'Macramé' } as const satisfies Record<SeriesFor['craft'], string>;
-
 /** What a student should bring along. */
 export const LEVEL_WORDS = { beginner: 'First steps', 'some-practice': 'Some rows behind you', 'sure-hand': 'Practised hands' } as const satisfies Record<SeriesFor['level'], string>;
 

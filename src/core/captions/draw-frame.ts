@@ -4,11 +4,11 @@
  * The lower fifth stays empty: a player lays the captions there.
  */
 import type { Scene } from '#core/captions/storyboard.ts';
-import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import { escapeWords, num } from '#core/craft/cloth/markup.ts';
+import { clothOf } from '#core/craft/cloth-of.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
-import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
 
 export const FRAME = { width: 960, height: 540 } as const;
 
@@ -33,7 +33,7 @@ export interface FrameWords {
   readonly chapter: string;
 }
 
-export function drawFrame(scene: Scene, progress: number, input: FigureInput, words: FrameWords): string {
+export function drawFrame(scene: Scene, progress: number, input: AnyFigureInput, words: FrameWords): string {
   const picture = scene.figure === undefined ? growing(scene.cloth, progress, input) : drawFigure(scene.figure, input, progress, { id: 'figure', decorative: true });
   return (
     `<svg xmlns="http://www.w3.org/2000/svg" viewBox="0 0 ${FRAME.width} ${FRAME.height}" width="${FRAME.width}" height="${FRAME.height}" fill="none">` +
@@ -55,8 +55,8 @@ function warpEnds(): string {
   return `<path d="${d}" stroke="#cbd1cf" stroke-width="1"/>`;
 }
 
-function growing(as: 'loom' | 'hanging', progress: number, input: FigureInput): string {
-  const piece = clothPieceOf(input.piece, input.plan, '');
+function growing(as: 'loom' | 'hanging', progress: number, input: AnyFigureInput): string {
+  const piece = clothOf(input.piece, input.plan, '');
   const draw = (width: number): string => drawCloth(piece, { id: 'cloth', as, width, woven: progress, decorative: true });
   /* Drawn again at the size it is shown at: threads scaled afterwards would blur into bands. */
   const { width, height } = sizeOf(draw(TRIAL_WIDTH));

@@ -1,8 +1,7 @@
 /** The piece a page reckons with: the student's own where she has one that can be woven, else the pattern. */
+import type { Piece, Plan } from '#core/craft/crafts.ts';
 import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
 import type { Problem } from '#core/outcome.ts';
 import type { Units } from '#core/units/units.ts';
 

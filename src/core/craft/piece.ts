@@ -1,5 +1,5 @@
 /**
- * A piece as a person describes it: loom, width, spacing, yarns, and the bands in
+ * A frame-loom piece as a person describes it: loom, width, spacing, yarns, and the bands in
  * the order they are woven. Everything else (ends, rows, yarn, hours, the drawing)
  * is reckoned from this.
  *
@@ -276,7 +276,7 @@ export interface BandByTechnique {
 export type TechniqueName = keyof BandByTechnique;
 export type Band = BandByTechnique[TechniqueName];
 
-export interface Piece {
+export interface FrameLoomPiece {
   readonly craft: 'frame-loom';
   /** Finished size of the woven cloth, without fringe. */
   readonly size: { readonly widthMm: number; readonly heightMm: number };

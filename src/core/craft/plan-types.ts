@@ -1,5 +1,5 @@
 /**
- * What a plan tells. Lengths are millimetres, masses grams, time hours; nothing is
+ * What the plan of a frame-loom piece tells. Lengths are millimetres, masses grams, time hours; nothing is
  * rounded but counts.
  */
 import type { TechniqueName } from '#core/craft/piece.ts';
@@ -91,7 +91,7 @@ export interface Hours {
   readonly high: number;
 }
 
-export interface Plan {
+export interface FrameLoomPlan {
   readonly ends: EndsPlan;
   readonly loom: LoomPlan;
   readonly weft: WeftPlan;

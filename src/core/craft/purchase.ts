@@ -34,6 +34,10 @@ export function withMargin(netMm: number, margin: number): number {
   return netMm * (1 + margin);
 }
 
+/** A plan weighs the net length; what one has in hand has its margin. */
+export const gramsInHand = ({ netMm, withMarginMm, massG }: { readonly netMm: number; readonly withMarginMm: number; readonly massG: number }): number =>
+  netMm === 0 ? 0 : massG * (withMarginMm / netMm);
+
 export interface Balls {
   readonly count: number;
   readonly leftOverMm: number;

@@ -2,8 +2,8 @@
  * The questions the public reckoner answers, each told by its `what`. Numbers are not
  * rounded; warnings come inside the answers that can have any.
  */
+import type { Plan } from '#core/craft/crafts.ts';
 import { planInFields } from '#core/craft/plan.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
 import { reckonLengthText, type LengthTextAnswer } from '#core/craft/reckoning/reckon-length-text.ts';

@@ -3,7 +3,7 @@
  * or height weaves it. A part that only plans speaks of all bands at once, so the part that speaks of the fewest wins.
  */
 import type { PartStretch } from '#core/craft/cloth/parts-strip.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 
 const BAND_KEY = /^band\.([a-z0-9-]+)\./;
 
@@ -17,7 +17,7 @@ function bandsNamed(amountKeys: readonly string[]): ReadonlySet<string> {
  * @param amountKeys of each part's text, in the order of the parts
  * @returns null when no text names a band, so that nothing can be told
  */
-export function bandsByPart(bands: Piece['bands'], amountKeys: readonly (readonly string[])[]): PartStretch[] | null {
+export function bandsByPart(bands: readonly { readonly name?: string | undefined }[], amountKeys: readonly (readonly string[])[]): PartStretch[] | null {
   const named = amountKeys.map(bandsNamed);
   const found = bands.map(({ name }) => (name === undefined ? undefined : mostGiven(name, named)));
   const first = found.find((part) => part !== undefined);
@@ -38,4 +38,9 @@ function mostGiven(name: string, named: readonly ReadonlySet<string>[]): number 
     if (bands.has(name) && (best === undefined || bands.size < (named[best]?.size ?? 0))) best = part;
   });
   return best;
+}
+
+/** The same, of a piece of any craft: null also where the craft knows no bands. */
+export function stretchesOf(piece: Piece, amountKeys: readonly (readonly string[])[]): PartStretch[] | null {
+  return 'bands' in piece ? bandsByPart(piece.bands, amountKeys) : null;
 }

@@ -1,9 +1,10 @@
 /** Lines of a gathering list with a student's own amounts, ready to be shown. */
-import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import { massOf } from '#core/craft/amounts/amount-types.ts';
 import { amountOf } from '#core/craft/amounts.ts';
+import type { Material } from '#core/craft/craft.ts';
+import { craftOf, type Piece } from '#core/craft/crafts.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
-import type { Piece, Yarn } from '#core/craft/piece.ts';
-import { gramsInHand } from '#core/gathering/yarn-table.ts';
+import type { Yarn } from '#core/craft/piece.ts';
 import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -54,10 +55,10 @@ export function partRows(lines: readonly GatheringLine[], part: number, shownFor
 
 /** The role a yarn's amount speaks of: `yarn.<role>`, or the yarn of a band. */
 export function roleOfKey(key: string | null, piece: Piece | null): string | undefined {
-  const [subject, name, what] = key?.split('.') ?? [];
-  if (subject === 'yarn') return name;
-  return subject === 'band' && what === 'yarn' ? piece?.bands.find((band) => band.name === name)?.yarn : undefined;
+  return key === null || piece === null ? undefined : craftOf(piece).roleOfKey(key, piece);
 }
+
+const materialsOf = (made: MadeFor | null): readonly Material[] => (made === null ? [] : craftOf(made.piece).materials(made));
 
 /**
  * A part may ask for the yarn of one band, or for what is left of a yarn; in the list of the whole series that is
@@ -77,21 +78,28 @@ function asWholeYarns(lines: readonly GatheringLine[], pattern: Piece | null): G
   });
 }
 
+/** What the amount of a line speaks of: its own key, or the yarn of the band it names. */
+function materialOf(key: string | null, made: MadeFor | null): Material | undefined {
+  const role = roleOfKey(key, made?.piece ?? null);
+  return materialsOf(made).find((material) => material.key === key || (role !== undefined && material.role === role));
+}
+
+const yarnsOf = (piece: Piece): Readonly<Record<string, Yarn | undefined>> => ('yarns' in piece ? piece.yarns : {});
+
 function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
   const { made, pattern, units } = shownFor;
-  const role = line.kind === 'yarn' ? roleOfKey(line.amountKey, made?.piece ?? null) : undefined;
-  const isWarp = line.kind === 'yarn' && line.amountKey === 'warp';
-  const yarn = isWarp ? made?.piece.warp.yarn : role === undefined ? undefined : made?.piece.yarns[role];
-  const patternYarn = role === undefined ? undefined : pattern?.yarns[role];
+  const material = line.kind === 'yarn' ? materialOf(line.amountKey, made) : undefined;
+  const yarn = material?.yarn;
+  const patternYarn = material?.role === undefined || pattern === null ? undefined : yarnsOf(pattern)[material.role];
   return {
     key: line.publicIds.join('.'),
     items: line.publicIds,
     kind: line.kind,
     name: ownName(line.name, yarn, patternYarn),
     ticked: line.ticked,
-    colour: line.kind === 'yarn' ? yarn?.colour : undefined,
+    colour: material?.colour,
     amount: amountIn(line, made, units),
-    also: line.kind === 'yarn' ? weightWords(line, role, made, units) : '',
+    also: line.kind === 'yarn' ? weightWords(line, material, units) : '',
     when: partsWords(line.parts, line.untilPart),
     note: line.note ?? '',
     standIn: isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
@@ -111,12 +119,10 @@ function amountIn({ amountKey, amountText: words }: MergedLine, made: MadeFor | 
   return amount.ok ? formatAmount(amount.value, units) : words;
 }
 
-function weightWords({ amountKey }: MergedLine, role: string | undefined, made: MadeFor | null, units: Units): string {
-  if (made === null || amountKey === null || amountKey.startsWith('band.')) return '';
-  const plan = amountKey === 'warp' ? made.plan.warp : role === undefined ? undefined : made.plan.yarns[role];
-  if (plan === undefined) return '';
-  const weight = amountText(massOf(gramsInHand(plan)), units);
-  return plan.balls === undefined ? weight : `${weight}, ${plan.balls === 1 ? '1 ball' : `${plan.balls} balls`}`;
+function weightWords({ amountKey }: MergedLine, material: Material | undefined, units: Units): string {
+  if (material === undefined || amountKey === null || amountKey.startsWith('band.')) return '';
+  const weight = amountText(massOf(material.grams), units);
+  return material.balls === undefined ? weight : `${weight}, ${material.balls === 1 ? '1 ball' : `${material.balls} balls`}`;
 }
 
 /** `Parts 2, 3 and 5 to 7.` */
@@ -139,17 +145,13 @@ export interface YarnSum {
   readonly grams: number;
 }
 
-/** All yarn to have in hand, warp and weft together. */
-export function yarnSum({ plan }: MadeFor): YarnSum {
-  const all = [plan.warp, ...Object.values(plan.yarns)];
-  return { lengthMm: all.reduce((sum, { withMarginMm }) => sum + withMarginMm, 0), grams: all.reduce((sum, yarn) => sum + gramsInHand(yarn), 0) };
+/** All yarn to have in hand, of every role together. */
+export function yarnSum(made: MadeFor): YarnSum {
+  const all = materialsOf(made);
+  return { lengthMm: all.reduce((sum, { lengthMm = 0 }) => sum + lengthMm, 0), grams: all.reduce((sum, { grams }) => sum + grams, 0) };
 }
 
-/** `36 cm inside, nails every 8 mm, ends in pairs: 76 ends, woven 30 cm wide` */
-export function loomWords({ piece, plan }: MadeFor, units: Units): string {
-  const size = (mm: number): string => amountText(lengthOf(mm, 'size'), units);
-  const inside = piece.loom.insideWidthMm === undefined ? '' : `${size(piece.loom.insideWidthMm)} inside, `;
-  const nth = piece.loom.everyNthNail ?? 1;
-  const nails = `nails every ${amountText(lengthOf(piece.loom.nailPitchMm, 'fine'), units)}${nth === 1 ? '' : `, one in ${nth} used`}`;
-  return `${inside}${nails}, ${piece.warp.endsTogether === 2 ? 'doubled' : 'single'} ends: ${plan.ends.count} ends, woven ${size(piece.size.widthMm)} wide`;
+/** `36 cm inside, nails every 8 mm, doubled ends: 76 ends, woven 30 cm wide` */
+export function loomWords(made: MadeFor, units: Units): string {
+  return craftOf(made.piece).summary(made, units);
 }

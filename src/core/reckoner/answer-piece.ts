@@ -1,6 +1,6 @@
 /** A whole small hanging: hem, fringe if wanted, one plain stretch, hem. */
-import type { Band, Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { amountLine, yarnInHand } from '#core/reckoner/answer-cloth.ts';
 import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { ryaBand, type TypedRya } from '#core/reckoner/answer-rya.ts';
@@ -11,7 +11,7 @@ import { makePiece, type Cloth, type Made } from '#core/reckoner/small-piece.ts'
 
 export interface PieceSection extends Section {
   /** The piece itself, for its picture. */
-  readonly made?: { readonly piece: Piece; readonly plan: Plan };
+  readonly made?: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan };
 }
 
 const NEEDS = [...YARN_FIELDS, ...SETT_FIELDS, ...ROW_FIELDS, 'frame-height', 'frame-width', 'dowel'] as const;

@@ -1,7 +1,7 @@
 /** The pieces the page makes of its fields: one stretch of cloth in one yarn, with a band of something else perhaps. */
 import { planPiece } from '#core/craft/plan.ts';
-import type { Band, Dowel, Piece, Yarn } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { Band, Dowel, FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { fieldOfPath, type FieldsOfKeys } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import type { TypedLoom, TypedRows } from '#core/reckoner/read-fields.ts';
@@ -29,12 +29,12 @@ export interface Making {
 }
 
 export interface Made {
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
   readonly notes: readonly string[];
 }
 
-function pieceOf({ yarn, loom, rows }: Cloth, { bands, yarns = {}, heightMm = rows.heightMm, frame, dowel }: Making): Piece {
+function pieceOf({ yarn, loom, rows }: Cloth, { bands, yarns = {}, heightMm = rows.heightMm, frame, dowel }: Making): FrameLoomPiece {
   return {
     craft: 'frame-loom',
     size: { widthMm: loom.widthMm, heightMm },

@@ -1,11 +1,27 @@
 /** What a person weighs before she buys: how long, how much yarn, how wide a loom. All from the plan. */
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
-import { gramsInHand } from '#core/gathering/yarn-table.ts';
+import { craftOf, type Piece, type Plan } from '#core/craft/crafts.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan, Hours } from '#core/craft/plan-types.ts';
+import { gramsInHand } from '#core/craft/purchase.ts';
 
+/** Of a piece of any craft. */
 export interface SeriesFigures {
-  readonly hours: Plan['hours'];
-  /** Warp and all weft yarns to have in hand, margins included. */
+  readonly hours: Hours;
+  /** All yarn, cord or fibre to have in hand, margins included. */
+  readonly yarnGrams: number;
+  /** Inside width of the narrowest frame that holds it; undefined where none is needed. */
+  readonly loomInsideMm: number | undefined;
+}
+
+export function seriesFigures(piece: Piece, plan: Plan): SeriesFigures {
+  const craft = craftOf(piece);
+  const made = { piece, plan };
+  return { hours: plan.hours, yarnGrams: craft.materials(made).reduce((sum, { grams }) => sum + grams, 0), loomInsideMm: craft.leastInsideMm(made) };
+}
+
+/** What somebody compares who tries a woven piece on her own loom. */
+export interface LoomFigures {
+  readonly hours: Hours;
   readonly yarnGrams: number;
   readonly warpMm: number;
   readonly weftGrams: number;
@@ -16,7 +32,7 @@ export interface SeriesFigures {
   readonly loomHeightMm: number;
 }
 
-export function seriesFigures(piece: Piece, plan: Plan): SeriesFigures {
+export function loomFigures(piece: FrameLoomPiece, plan: FrameLoomPlan): LoomFigures {
   const weftGrams = Object.values(plan.yarns).reduce((sum, yarn) => sum + gramsInHand(yarn), 0);
   return {
     hours: plan.hours,

@@ -2,7 +2,7 @@
 import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
 import { widestOn } from '#core/craft/fitting/ways-to-fit.ts';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -11,9 +11,9 @@ import { readTypedLoom, type LoomFaults, type TypedLoom } from './typed-loom.ts'
 export type Trial =
   /** Something typed cannot be used. */
   | { readonly ok: false; readonly fields: LoomFaults }
-  | { readonly ok: true; readonly fits: true; readonly mine: MyPiece; readonly fitted: FittedPiece; readonly warnings: readonly Problem[]; readonly freeMm: number; readonly narrowed: boolean }
+  | { readonly ok: true; readonly fits: true; readonly mine: MyPiece; readonly fitted: FittedPiece<FrameLoomPiece>; readonly warnings: readonly Problem[]; readonly freeMm: number; readonly narrowed: boolean }
   /** `widest` is the piece as wide as the loom allows at this spacing; null when nothing worth weaving fits. */
-  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widest: FittedPiece | null };
+  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widest: FittedPiece<FrameLoomPiece> | null };
 
 /** The engine's own limit: a loom on which any pattern has room. */
 const BOUNDLESS_MM = 20_000;
@@ -22,7 +22,7 @@ const BOUNDLESS_MM = 20_000;
  * Tries `pattern` on the loom that was typed. `title` is how the piece is spoken of. Every sentence is in the person's
  * units and says what would work.
  */
-export function tryOnLoom(pattern: Piece, title: string, typed: TypedLoom): Trial {
+export function tryOnLoom(pattern: FrameLoomPiece, title: string, typed: TypedLoom): Trial {
   const read = readTypedLoom(typed);
   if (!read.ok) return { ok: false, fields: read.fields };
   const { units, ends } = typed;
@@ -35,7 +35,7 @@ export function tryOnLoom(pattern: Piece, title: string, typed: TypedLoom): Tria
   return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.mine.widthMm ?? null), widest: widest?.fitted ?? null };
 }
 
-function fitting(mine: MyPiece, fitted: FittedPiece, warnings: readonly Problem[], insideWidthMm: number, narrowed: boolean): Trial {
+function fitting(mine: MyPiece, fitted: FittedPiece<FrameLoomPiece>, warnings: readonly Problem[], insideWidthMm: number, narrowed: boolean): Trial {
   const once = [...new Map(warnings.map((warning) => [warning.message, warning])).values()];
   return { ok: true, fits: true, mine, fitted, warnings: once, freeMm: (insideWidthMm - fitted.plan.ends.woundWidthMm) / 2, narrowed };
 }
@@ -45,11 +45,11 @@ const sentences = (problems: readonly Problem[]): string => [...new Set(problems
 
 interface Widest {
   readonly mine: MyPiece;
-  readonly fitted: FittedPiece;
+  readonly fitted: FittedPiece<FrameLoomPiece>;
   readonly warnings: readonly Problem[];
 }
 
-function widestThatFits(pattern: Piece, onLoom: MyPiece, units: Units): Widest | null {
+function widestThatFits(pattern: FrameLoomPiece, onLoom: MyPiece, units: Units): Widest | null {
   const widthMm = widestOn(pattern, onLoom, units);
   if (widthMm === undefined) return null;
   const mine: MyPiece = { ...onLoom, widthMm };
@@ -57,7 +57,7 @@ function widestThatFits(pattern: Piece, onLoom: MyPiece, units: Units): Widest |
   return fit.ok ? { mine, fitted: fit.value, warnings: fit.warnings } : null;
 }
 
-function tooWide(pattern: Piece, title: string, onLoom: MyPiece, units: Units, widestMm: number | null): string {
+function tooWide(pattern: FrameLoomPiece, title: string, onLoom: MyPiece, units: Units, widestMm: number | null): string {
   const size = (mm: number): string => amountText(lengthOf(mm, 'size'), units);
   const inside = onLoom.loom?.insideWidthMm ?? 0;
   const pitch = onLoom.loom?.nailPitchMm ?? 0;

@@ -4,7 +4,7 @@
  */
 import { useEffect, useId, useMemo, useState, type KeyboardEvent } from 'react';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
-import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
 import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { stepAt, stepsOf, type StepAt } from '#core/craft/figures/figure-steps.ts';
 import { useMovement } from '#islands/cloth/use-movement.ts';
@@ -14,7 +14,7 @@ interface FigurePlayerProps {
   /** Begins the ids in the drawing: only this figure's on the page. */
   readonly id: string;
   readonly kind: FigureKind;
-  readonly input: FigureInput;
+  readonly input: AnyFigureInput;
   /** What holds the finished drawing; it is drawn anew in there. */
   readonly drawing: HTMLElement;
 }

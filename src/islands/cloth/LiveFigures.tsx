@@ -4,12 +4,12 @@
  */
 import { useEffect, useState } from 'react';
 import { createPortal } from 'react-dom';
-import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
 import { isFigureKind, type FigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { FigurePlayer } from '#islands/cloth/FigurePlayer.tsx';
 
 interface LiveFiguresProps {
-  readonly input: FigureInput;
+  readonly input: AnyFigureInput;
 }
 
 interface Found {

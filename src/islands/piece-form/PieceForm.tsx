@@ -9,8 +9,8 @@ import type { Act } from '#core/craft/piece-form/change-typed.ts';
 import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
 import { judgeTyped, type Judgement } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { fieldId } from '#islands/ui/field-id.ts';
 import { ToastRegion, useToasts } from '#islands/ui/ToastRegion.tsx';
 import { BandList, useChosenBand, YarnList } from './BandList.tsx';
@@ -43,8 +43,8 @@ export interface PieceFormProps {
 /** A form that could be woven. */
 interface Made {
   readonly judged: Judgement;
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
   readonly typed: TypedPiece;
 }
 

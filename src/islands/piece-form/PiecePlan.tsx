@@ -1,8 +1,8 @@
 import { amountOf } from '#core/craft/amounts.ts';
 import type { Found } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
 import { yarnTable } from '#core/gathering/yarn-table.ts';
 import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
@@ -14,7 +14,7 @@ import { placeOfField } from './piece-form-state.ts';
 
 interface PiecePlanProps {
   /** Null while nothing could be reckoned yet. */
-  readonly made: { readonly piece: Piece; readonly plan: Plan } | null;
+  readonly made: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan } | null;
   readonly isOld: boolean;
   readonly warnings: readonly Found[];
   readonly typed: TypedPiece;
@@ -42,7 +42,7 @@ export function PiecePlan({ made, isOld, warnings, typed }: PiecePlanProps) {
   );
 }
 
-function Numbers({ piece, plan, units, isOld }: { readonly piece: Piece; readonly plan: Plan; readonly units: Units; readonly isOld: boolean }) {
+function Numbers({ piece, plan, units, isOld }: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan; readonly units: Units; readonly isOld: boolean }) {
   const rows = plan.bands.reduce((sum, { picks = 0 }) => sum + picks, 0);
   const lines = ROWS.flatMap((key): { label: string; parts: readonly AmountPart[] }[] => {
     const amount = amountOf(key, piece, plan);
@@ -68,7 +68,7 @@ function Numbers({ piece, plan, units, isOld }: { readonly piece: Piece; readonl
           {yarns.map(({ name, detail, colour, lengthMm, grams }) => (
             <tr key={`${name}${detail}${colour ?? ''}`}>
               <th scope="row"><span className="dyed"><YarnDot colour={colour} />{detail === '' ? name : detail}</span></th>
-              <td className="num"><Parts parts={formatAmount(lengthOf(lengthMm, 'yarn'), units)} /></td>
+              <td className="num"><Parts parts={formatAmount(lengthOf(lengthMm ?? 0, 'yarn'), units)} /></td>
               <td className="num"><Parts parts={formatAmount(massOf(grams), units)} /></td>
             </tr>
           ))}

@@ -2,8 +2,8 @@
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { swatchOfBand } from '#core/craft/cloth/swatch-of.ts';
-import type { Band, Piece } from '#core/craft/piece.ts';
-import type { BandPlan, Plan } from '#core/craft/plan-types.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
+import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 
@@ -33,7 +33,7 @@ function countsOf(band: Band, planned: BandPlan): string {
 }
 
 /** In the order of the piece's bands. */
-export function bandWords(piece: Piece, plan: Plan, cloth: WovenPiece, units: Units): readonly BandWords[] {
+export function bandWords(piece: FrameLoomPiece, plan: FrameLoomPlan, cloth: WovenPiece, units: Units): readonly BandWords[] {
   return piece.bands.flatMap((band, index) => {
     const planned = plan.bands[index];
     if (planned === undefined) return [];

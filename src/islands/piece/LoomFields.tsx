@@ -4,7 +4,7 @@ import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WA
 import { chosenLoom } from '#core/craft/my-piece/judge-mine.ts';
 import { loomKind } from '#core/craft/looms/looms.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { fieldUnit } from '#core/craft/piece-form/field-text.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
@@ -14,7 +14,7 @@ import type { MineEvent } from './mine-after.ts';
 
 interface LoomFieldsProps {
   typed: TypedMine;
-  pattern: Piece;
+  pattern: FrameLoomPiece;
   faults: Readonly<Record<string, string>>;
   /** With script, only what her loom asks is shown. */
   alive: boolean;

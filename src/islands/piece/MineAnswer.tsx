@@ -3,12 +3,12 @@ import { amountOf, type Amount } from '#core/craft/amounts.ts';
 import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
-import { seriesFigures } from '#core/series/figures.ts';
+import { loomFigures } from '#core/series/figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
-import { atOneScale, type Made } from '#islands/series/trial.ts';
+import { atOneScale, type MadeOnLoom } from '#islands/series/trial.ts';
 import { Figures, type Figure } from '#islands/ui/Figures.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
@@ -16,7 +16,7 @@ import { Parts } from '#islands/ui/Parts.tsx';
 interface MineAnswerProps {
   name: string;
   teacher: string;
-  pattern: Made;
+  pattern: MadeOnLoom;
   judged: MineJudgement;
   units: Units;
 }
@@ -46,7 +46,7 @@ function Words({ says }: { says: readonly string[] }) {
   return says.length === 0 ? null : <ul className="small mine-words">{says.map((sentence) => <li key={sentence}>{sentence}</li>)}</ul>;
 }
 
-function Looms({ name, teacher, pattern, made, units }: { name: string; teacher: string; pattern: Made; made: Made | null; units: Units }) {
+function Looms({ name, teacher, pattern, made, units }: { name: string; teacher: string; pattern: MadeOnLoom; made: MadeOnLoom | null; units: Units }) {
   const cloths = useMemo(() => ({ pattern: clothPieceOf(pattern.piece, pattern.plan, name), mine: made === null ? null : clothPieceOf(made.piece, made.plan, name) }), [pattern, made, name]);
   const inside = cloths.mine?.loom?.insideWidthMm ?? cloths.pattern.loom?.insideWidthMm ?? cloths.pattern.widthMm;
   const { patternPx, loomPx } = atOneScale(cloths.pattern.widthMm, inside, ROOM_PX);
@@ -60,8 +60,8 @@ function Looms({ name, teacher, pattern, made, units }: { name: string; teacher:
   );
 }
 
-function figuresOf(made: Made, pattern: Made, units: Units): Figure[] {
-  const [mine, theirs] = [seriesFigures(made.piece, made.plan), seriesFigures(pattern.piece, pattern.plan)];
+function figuresOf(made: MadeOnLoom, pattern: MadeOnLoom, units: Units): Figure[] {
+  const [mine, theirs] = [loomFigures(made.piece, made.plan), loomFigures(pattern.piece, pattern.plan)];
   const text = (parts: readonly AmountPart[]): string => parts.map((part) => part.text).join('');
   const figure = (label: string, now: readonly AmountPart[], then: readonly AmountPart[]): Figure => ({ label, value: now, was: text(now) === text(then) ? undefined : `pattern ${text(then)}` });
   const both = (label: string, of: (figures: typeof mine) => readonly AmountPart[]): Figure => figure(label, of(mine), of(theirs));
@@ -77,7 +77,7 @@ function figuresOf(made: Made, pattern: Made, units: Units): Figure[] {
 const KEYS = ['ends', 'nails', 'spacing', 'wound-width', 'loom.width', 'loom.height', 'warp', 'pick', 'spacer.width', 'spacer.height', 'dowel.length', 'hours'];
 
 /** The numbers with the way each was got. */
-function Reckoned({ made, units }: { made: Made; units: Units }) {
+function Reckoned({ made, units }: { made: MadeOnLoom; units: Units }) {
   const keys = [...KEYS, ...Object.keys(made.piece.yarns).map((role) => `yarn.${role}`)];
   const amounts = keys.flatMap((key): Amount[] => {
     const amount = amountOf(key, made.piece, made.plan);

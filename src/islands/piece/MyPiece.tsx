@@ -5,7 +5,7 @@
 import { useDeferredValue, useEffect, useMemo, useReducer, useState } from 'react';
 import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { Button } from '#islands/ui/Button.tsx';
 import { LoomFields } from './LoomFields.tsx';
@@ -20,7 +20,7 @@ export interface MyPieceProps {
   readonly name: string;
   /** First name of the teacher. */
   readonly teacher: string;
-  readonly pattern: Piece;
+  readonly pattern: FrameLoomPiece;
   readonly typed: TypedMine;
   /** Counts what was kept; sent back, so that two windows do not undo each other. */
   readonly revision: number;

@@ -8,7 +8,7 @@ import { isWorthChoosing, type WayId, type WayToFit } from '#core/craft/fitting/
 import { WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import { waysOf } from '#core/craft/my-piece/judge-mine.ts';
 import { leaveOutNames, wayOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { Problem } from '#core/outcome.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { likelyHours } from '#core/series/hours-words.ts';
@@ -23,7 +23,7 @@ interface WayFieldsProps {
   typed: TypedMine;
   /** What stands in the form this moment. */
   chosen: TypedMine;
-  pattern: Piece;
+  pattern: FrameLoomPiece;
   /** Null for a pattern that does not fit its own loom. */
   asPattern: Made | null;
   name: string;
@@ -133,7 +133,7 @@ function Comes({ made, units }: { made: Made & { readonly changes: readonly stri
   );
 }
 
-function BandTicks({ chosen, pattern, change }: { chosen: TypedMine; pattern: Piece; change: Dispatch<MineEvent> }) {
+function BandTicks({ chosen, pattern, change }: { chosen: TypedMine; pattern: FrameLoomPiece; change: Dispatch<MineEvent> }) {
   const names = leaveOutNames(pattern);
   // From the end that was woven last, as the cloth stands on the loom.
   const bands = pattern.bands.map((band, index) => ({ band, index, field: names[index] ?? '' })).filter(({ band }) => band.technique !== 'hem-stitch').toReversed();

@@ -2,7 +2,7 @@ import type { Dispatch } from 'react';
 import { AS_PATTERN, YARN_BY } from '#core/craft/my-piece/asked-of-mine.ts';
 import { isOwnYarn, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';
-import type { Piece, Yarn } from '#core/craft/piece.ts';
+import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
 import { gristAsked } from '#core/craft/piece-form/asked-of-yarn.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
@@ -14,9 +14,9 @@ import type { MineEvent } from './mine-after.ts';
 
 interface YarnFieldsProps {
   typed: TypedMine;
-  pattern: Piece;
+  pattern: FrameLoomPiece;
   /** Null while the form does not come to a piece. */
-  fitted: FittedPiece | null;
+  fitted: FittedPiece<FrameLoomPiece> | null;
   faults: Readonly<Record<string, string>>;
   change: Dispatch<MineEvent>;
   /** With script, only what is asked for is shown. */

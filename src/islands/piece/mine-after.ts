@@ -1,7 +1,7 @@
 // What can be done to the typed form, apart from any screen.
 import { WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import type { WayId } from '#core/craft/fitting/ways-to-fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Units } from '#core/units/units.ts';
 
@@ -10,7 +10,7 @@ export type MineEvent =
   | { readonly kind: 'leave-out'; readonly key: string; readonly isOut: boolean }
   | { readonly kind: 'type-yarn'; readonly role: string; readonly key: string; readonly text: string }
   | { readonly kind: 'units'; readonly units: Units }
-  | { readonly kind: 'as-pattern'; readonly pattern: Piece };
+  | { readonly kind: 'as-pattern'; readonly pattern: FrameLoomPiece };
 
 export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
   switch (event.kind) {

@@ -1,11 +1,11 @@
 /** Everything to gather for the piece as it is being tried: yarn by length and weight, then tools and what else. */
 import { amountOf } from '#core/craft/amounts.ts';
 import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import { craftOf, type Made } from '#core/craft/crafts.ts';
 import type { MergedLine } from '#core/gathering/merge.ts';
 import { yarnTable } from '#core/gathering/yarn-table.ts';
-import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
+import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import type { Made } from '#islands/series/trial.ts';
 import { useTried } from '#islands/series/trial-store.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
@@ -27,7 +27,7 @@ export function ToGather({ lines, ...given }: ToGatherProps) {
     <>
       {made !== null && (
         <>
-          <p className="small quiet">{own ? 'For your' : 'For the pattern’s'} {amountText(lengthOf(made.piece.size.widthMm, 'size'), units)}, with a margin.</p>
+          <p className="small quiet">For {own ? 'your own' : 'the pattern’s'} piece, {craftOf(made.piece).size(made, units)}, with a margin.</p>
           <YarnRows made={made} units={units} />
           <h3 className="mt-5">Tools and what else</h3>
         </>
@@ -47,22 +47,23 @@ export function ToGather({ lines, ...given }: ToGatherProps) {
 }
 
 function YarnRows({ made: { piece, plan }, units }: { readonly made: Made; readonly units: Units }) {
+  const { words } = craftOf(piece);
   const { lines, grams } = yarnTable(piece, plan);
   return (
-    <div className="scrolls" tabIndex={0} role="region" aria-label="Yarn to gather">
+    <div className="scrolls" tabIndex={0} role="region" aria-label={`${words.material} to gather`}>
       <table className="table mt-2">
-        <caption className="hide">Yarn to gather</caption>
-        <thead><tr><th scope="col">Yarn</th><th scope="col" className="num">Length</th><th scope="col" className="num">Weight</th></tr></thead>
+        <caption className="hide">{words.material} to gather</caption>
+        <thead><tr><th scope="col">{words.material}</th><th scope="col" className="num">Length</th><th scope="col" className="num">Weight</th></tr></thead>
         <tbody>
           {lines.map(({ name, detail, colour, lengthMm, grams: weight }) => (
             <tr key={`${name} ${detail} ${colour ?? ''}`}>
               <th scope="row" className="yarn-name"><YarnDot colour={colour} />{name}{detail !== '' && <span className="quiet"> {detail}</span>}</th>
-              <td className="num"><Parts parts={formatAmount(lengthOf(lengthMm, 'yarn'), units)} /></td>
+              <td className="num">{lengthMm !== undefined && <Parts parts={formatAmount(lengthOf(lengthMm, 'yarn'), units)} />}</td>
               <td className="num"><Parts parts={formatAmount(massOf(weight), units)} /></td>
             </tr>
           ))}
         </tbody>
-        <tfoot><tr><th scope="row">Warp and weft together</th><td /><td className="num"><Parts parts={formatAmount(massOf(grams), units)} /></td></tr></tfoot>
+        <tfoot><tr><th scope="row">{words.allMaterial}</th><td /><td className="num"><Parts parts={formatAmount(massOf(grams), units)} /></td></tr></tfoot>
       </table>
     </div>
   );

@@ -1,19 +1,19 @@
 /** The answer in words and figures: fits or not, what would, and what changes against the pattern. */
 import type { MouseEvent } from 'react';
 import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
-import { seriesFigures } from '#core/series/figures.ts';
+import { loomFigures } from '#core/series/figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
 import type { Trial } from '#core/trial/try-on-loom.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { EveryNumber } from '#islands/series/EveryNumber.tsx';
-import { fittedBy, type Made } from '#islands/series/trial.ts';
+import { fittedBy, type MadeOnLoom } from '#islands/series/trial.ts';
 import { Figures, type Figure } from '#islands/ui/Figures.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 
 interface TrialAnswerProps {
   readonly teacher: string;
-  readonly asPattern: Made;
+  readonly asPattern: MadeOnLoom;
   readonly trial: Trial;
   readonly units: Units;
   /** False while the form still holds the pattern's own loom. */
@@ -55,8 +55,8 @@ export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHre
   );
 }
 
-function figuresOf(made: Made, asPattern: Made, units: Units, own: boolean): Figure[] {
-  const [hers, pattern] = [seriesFigures(made.piece, made.plan), seriesFigures(asPattern.piece, asPattern.plan)];
+function figuresOf(made: MadeOnLoom, asPattern: MadeOnLoom, units: Units, own: boolean): Figure[] {
+  const [hers, pattern] = [loomFigures(made.piece, made.plan), loomFigures(asPattern.piece, asPattern.plan)];
   const text = (parts: readonly AmountPart[]): string => parts.map((part) => part.text).join('');
   const was = (now: readonly AmountPart[], then: readonly AmountPart[]): string | undefined => (own && text(now) !== text(then) ? `pattern ${text(then)}` : undefined);
   const figure = (label: string, now: readonly AmountPart[], then: readonly AmountPart[]): Figure => ({ label, value: now, was: was(now, then) });

@@ -4,11 +4,12 @@ import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';
 import { countOf, lengthOf } from '#core/craft/amounts/amount-types.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { Trial } from '#core/trial/try-on-loom.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
-import { atOneScale, type Made } from '#islands/series/trial.ts';
+import { atOneScale, type MadeOnLoom } from '#islands/series/trial.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 
 /** Both drawings without the gap between them; on a phone they shrink by a fifth together. */
@@ -17,7 +18,7 @@ const ROOM_PX = 412;
 interface TrialLoomsProps {
   readonly name: string;
   readonly teacher: string;
-  readonly asPattern: Made;
+  readonly asPattern: MadeOnLoom;
   readonly trial: Trial;
   readonly units: Units;
   readonly own: boolean;
@@ -51,7 +52,7 @@ export function TrialLooms({ name, teacher, asPattern, trial, units, own }: Tria
   );
 }
 
-interface HerLoom { readonly fitted: FittedPiece; readonly woven: 0 | 1 }
+interface HerLoom { readonly fitted: FittedPiece<FrameLoomPiece>; readonly woven: 0 | 1 }
 
 /** Her loom with the piece on it; bare where the piece does not fit; nothing while it cannot be read. */
 function herLoom(trial: Trial): HerLoom | null {
@@ -62,7 +63,7 @@ function herLoom(trial: Trial): HerLoom | null {
 
 const wordsOf = ({ title }: WovenPiece, woven: boolean): string => (woven ? `${title} on the loom that was typed` : 'The loom that was typed, bare');
 
-function Ends({ made: { piece, plan }, units }: { readonly made: Made; readonly units: Units }) {
+function Ends({ made: { piece, plan }, units }: { readonly made: MadeOnLoom; readonly units: Units }) {
   return (
     <>
       <Parts parts={formatAmount(lengthOf(piece.size.widthMm, 'size'), units)} />, <Parts parts={formatAmount(countOf(plan.ends.count, 'end', 'ends'), units)} />{piece.warp.endsTogether === 2 && ' in pairs'}

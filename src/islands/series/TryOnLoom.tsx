@@ -3,11 +3,11 @@
  * asks the same page again; the answer is the same, because the same core gives it.
  */
 import { useDeferredValue, useEffect, useMemo, useRef, useState, type SyntheticEvent } from 'react';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { inOtherUnits, loomFields, loomFieldUnits, type TypedLoom } from '#core/trial/typed-loom.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { Units } from '#core/units/units.ts';
-import { fittedBy, loomOfPattern, madeAsPattern, type Made } from '#islands/series/trial.ts';
+import { fittedBy, loomOfPattern, madeAsPattern, type MadeOnLoom } from '#islands/series/trial.ts';
 import { setTried } from '#islands/series/trial-store.ts';
 import { TrialAnswer } from '#islands/series/TrialAnswer.tsx';
 import { TrialLooms } from '#islands/series/TrialLooms.tsx';
@@ -20,7 +20,7 @@ export interface TryOnLoomProps {
   readonly name: string;
   /** First name of the teacher. */
   readonly teacher: string;
-  readonly pattern: Piece;
+  readonly pattern: FrameLoomPiece;
   /** What the address says she typed before. */
   readonly typed: TypedLoom | null;
   readonly units: Units;
@@ -35,7 +35,7 @@ export function TryOnLoom(props: TryOnLoomProps) {
   return asPattern === null ? null : <Trying {...props} asPattern={asPattern} />;
 }
 
-function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, hasSeat, asPattern }: TryOnLoomProps & { asPattern: Made }) {
+function Trying({ slug, name, teacher, pattern, typed: before, units, seatForm, hasSeat, asPattern }: TryOnLoomProps & { asPattern: MadeOnLoom }) {
   const [typed, setTyped] = useState<TypedLoom>(before ?? loomOfPattern(asPattern, units));
   const [own, setOwn] = useState(before !== null);
   const [alive, setAlive] = useState(false);

@@ -1,10 +1,10 @@
 /** What is being tried on this page, shared by its islands: one changes it, the list to gather follows. */
 import { useSyncExternalStore } from 'react';
 import type { Units } from '#core/units/units.ts';
-import type { Made } from '#islands/series/trial.ts';
+import type { MadeOnLoom } from '#islands/series/trial.ts';
 
 export interface Tried {
-  readonly made: Made;
+  readonly made: MadeOnLoom;
   readonly units: Units;
   /** Reckoned for a loom that was typed, not for the pattern's own. */
   readonly own: boolean;

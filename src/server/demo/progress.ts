@@ -1,8 +1,8 @@
 /** What the demo students have done: Maud is at her warped loom and waits for an answer, Jonas has just come. */
 import { writeFile, rm } from 'node:fs/promises';
 import sharp from 'sharp';
-import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
+import { clothOf } from '#core/craft/cloth-of.ts';
 import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
 import { services } from '#server/services.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
@@ -52,7 +52,7 @@ async function drawnPhoto(series: Series, seat: Enrolment): Promise<string> {
   const fitted = pattern === null ? null : fitPiece(pattern, mine);
   if (fitted?.ok !== true) throw new RangeError('the demo piece does not fit the demo loom');
   const { piece, plan } = fitted.value;
-  const svg = drawCloth(clothPieceOf(piece, plan, series.title), { id: 'photo', as: 'loom', width: 1_100, woven: 0, decorative: true });
+  const svg = drawCloth(clothOf(piece, plan, series.title), { id: 'photo', as: 'loom', width: 1_100, woven: 0, decorative: true });
   const path = await services().media.temporaryPath('warped-loom.jpg');
   const loom = await withOwnDrawings(() => sharp(Buffer.from(svg)).png().toBuffer());
   const { height = 0 } = await sharp(loom).metadata();

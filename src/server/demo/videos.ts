@@ -1,7 +1,7 @@
 /** The short films of a shipped series: drawn frame by frame from their storyboards and the pattern piece. */
 import { mkdtemp, rm, stat } from 'node:fs/promises';
 import { parse as parseYaml } from 'yaml';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece, Plan } from '#core/craft/crafts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { MediaFile } from '#contracts/media.ts';
 import { SeriesFile } from '#contracts/series-folder.ts';
@@ -24,7 +24,7 @@ export async function drawVideos(store: MediaStore, series: Series, ownerId: num
 
 interface VideoToDraw {
   store: MediaStore; series: Series; ownerId: number; name: string; title: string; storyboard: string;
-  piece: Piece; plan: Extract<ReturnType<typeof planPiece>, { ok: true }>['value'];
+  piece: Piece; plan: Plan;
 }
 
 async function drawVideo({ store, series, ownerId, name, title, storyboard, piece, plan }: VideoToDraw): Promise<void> {

@@ -16,7 +16,7 @@ import type { Chapter, Cue } from '#core/captions/cues.ts';
 import { FRAME, drawFrame } from '#core/captions/draw-frame.ts';
 import { progressAt, timeStoryboard, type Storyboard, type TimedScene, type Timing } from '#core/captions/storyboard.ts';
 import { captionsToVtt, chaptersToVtt } from '#core/captions/web-vtt.ts';
-import type { FigureInput } from '#core/craft/figures/figure.ts';
+import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
 import { withOwnDrawings } from '#server/media/decoders.ts';
 
 export interface DrawnVideo {
@@ -44,7 +44,7 @@ export function readStoryboard(yaml: string): Storyboard {
 }
 
 /** Makes `<name>.mp4`, `.vtt`, `.chapters.vtt` and `.jpg` in `folder`, which must exist. */
-export async function drawStoryboard(storyboard: Storyboard, input: FigureInput, folder: string, name: string): Promise<DrawnVideo> {
+export async function drawStoryboard(storyboard: Storyboard, input: AnyFigureInput, folder: string, name: string): Promise<DrawnVideo> {
   const timing = timeStoryboard(storyboard);
   const at = (ending: string): string => join(folder, `${name}${ending}`);
   const files = { videoPath: at('.mp4'), captionsPath: at('.vtt'), chaptersPath: at('.chapters.vtt'), posterPath: at('.jpg') };
@@ -60,7 +60,7 @@ export async function drawStoryboard(storyboard: Storyboard, input: FigureInput,
 }
 
 /** The frame at a moment as raw RGB; the same buffer again while nothing changes. */
-function frameMaker(title: string, timing: Timing, input: FigureInput): (atMs: number) => Promise<Buffer> {
+function frameMaker(title: string, timing: Timing, input: AnyFigureInput): (atMs: number) => Promise<Buffer> {
   let before: { readonly svg: string; readonly pixels: Promise<Buffer> } | undefined;
   return (atMs) => {
     const timed = sceneAt(timing, atMs);
@@ -77,7 +77,7 @@ function sceneAt(timing: Timing, atMs: number): TimedScene {
 }
 
 /** The scene that moves longest, nearly done. */
-async function posterOf(timing: Timing, title: string, input: FigureInput): Promise<Buffer> {
+async function posterOf(timing: Timing, title: string, input: AnyFigureInput): Promise<Buffer> {
   const longest = timing.scenes.reduce((best, scene) => (scene.toMs - scene.fromMs > best.toMs - best.fromMs ? scene : best), sceneAt(timing, 0));
   const progress = progressAt(longest, longest.fromMs + (longest.toMs - longest.fromMs) * 0.6);
   const svg = drawFrame(longest.scene, progress, input, { title, chapter: longest.chapter });

@@ -1,4 +1,5 @@
 import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
+import { CRAFT_NAMES, type CraftName } from '#core/craft/crafts.ts';
 import { count, id, json, longText, maybeMoment, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
@@ -9,7 +10,7 @@ export class Series extends Model<InferAttributes<Series>, InferCreationAttribut
   declare workroomId: number;
   declare slug: string;
   declare title: string;
-  declare craft: CreationOptional<'frame-loom' | 'macrame'>;
+  declare craft: CreationOptional<CraftName>;
   declare level: CreationOptional<'beginner' | 'some-practice' | 'sure-hand'>;
   declare summary: CreationOptional<string>;
   declare story: CreationOptional<string>;
@@ -29,7 +30,7 @@ Series.init({
   workroomId: ref(),
   slug: text(64),
   title: text(120),
-  craft: oneOf(['frame-loom', 'macrame'], 'frame-loom'),
+  craft: oneOf(CRAFT_NAMES, 'frame-loom'),
   level: oneOf(['beginner', 'some-practice', 'sure-hand'], 'beginner'),
   summary: { ...text(400), defaultValue: '' },
   story: longText(),

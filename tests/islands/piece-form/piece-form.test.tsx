@@ -4,11 +4,11 @@ import { renderToString } from 'react-dom/server';
 import { afterEach, describe, expect, test } from 'vitest';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
 import { emptyForm, typePiece } from '#core/craft/piece-form/type-piece.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { PieceForm, type PieceFormProps } from '#islands/piece-form/PieceForm.tsx';
 import { pieceFormAfter, pieceFormBegins, placeOfField, placeWord, toldNow, type PieceFormEvent, type PieceFormState } from '#islands/piece-form/piece-form-state.ts';
 
-const lowTide = JSON.parse(readFileSync('content/series/low-tide/piece.json', 'utf8')) as Piece;
+const lowTide = JSON.parse(readFileSync('content/series/low-tide/piece.json', 'utf8')) as FrameLoomPiece;
 const typed = typePiece(lowTide, 'cm');
 const after = (...events: PieceFormEvent[]): PieceFormState => events.reduce(pieceFormAfter, pieceFormBegins(typed, false, false));
 
@@ -54,7 +54,7 @@ describe('the state of the form', () => {
 });
 
 /** Small, so that looking for things in it is quick. */
-const small: Piece = {
+const small: FrameLoomPiece = {
   craft: 'frame-loom', size: { widthMm: 300, heightMm: 400 }, loom: { nailPitchMm: 10, warping: 'zigzag', insideHeightMm: 520, insideWidthMm: 400 }, warp: { yarn: { tex: 400 }, parity: 'even' },
   beat: { picksPerWeftDiameter: 0.7 }, yarns: { ground: { metresPer100g: 180 } },
   bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 60 }, { technique: 'tabby', name: 'sky', yarn: 'ground', fill: true }],

@@ -3,14 +3,14 @@ import userEvent from '@testing-library/user-event';
 import { hydrateRoot } from 'react-dom/client';
 import { renderToString } from 'react-dom/server';
 import { afterEach, beforeAll, describe, expect, it, vi } from 'vitest';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import { madeAsPattern } from '#islands/series/trial.ts';
 import { ToGather } from '#islands/series/ToGather.tsx';
 import { TryOnLoom } from '#islands/series/TryOnLoom.tsx';
 import { lowTide } from '../../support/low-tide.ts';
 
-let pattern: Piece;
+let pattern: FrameLoomPiece;
 beforeAll(async () => { pattern = await lowTide(); });
 afterEach(() => {
   cleanup();

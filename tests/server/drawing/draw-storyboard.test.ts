@@ -5,7 +5,7 @@ import { join } from 'node:path';
 import { promisify } from 'node:util';
 import { afterAll, beforeAll, describe, expect, it } from 'vitest';
 import { timeStoryboard } from '#core/captions/storyboard.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { drawStoryboard, readStoryboard, type DrawnVideo } from '#server/media/draw-storyboard.ts';
 
@@ -18,7 +18,7 @@ interface Probe {
 }
 
 async function lowTide() {
-  const piece: Piece = JSON.parse(await readFile('content/series/low-tide/piece.json', 'utf8'));
+  const piece: FrameLoomPiece = JSON.parse(await readFile('content/series/low-tide/piece.json', 'utf8'));
   const plan = planPiece(piece);
   if (!plan.ok) throw new Error('the demo piece has no plan');
   return { piece, plan: plan.value, units: 'cm' as const };

@@ -1,6 +1,7 @@
 import { beforeEach, describe, expect, test } from 'vitest';
 import { statementListeners } from '#server/db/sequelize.ts';
 import { PatternPiece, User, Workroom, WorkroomHelper, type Series } from '#server/models/index.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { shopAddress, shopWishesOf, type ShopWishes } from '#contracts/shop.ts';
 import { SHOP_PAGE_LENGTH, shopSeries } from '#server/queries/shop/shop-series.ts';
 import { teacherPage } from '#server/queries/shop/teacher-page.ts';
@@ -37,7 +38,7 @@ describe('what hangs at the shop front', () => {
     await buildLesson({ seriesId: old.id, title: 'Not yet', publishedVersionId: null });
     const shop = await shopSeries({});
     expect(shop.series.map(({ slug }) => slug)).toEqual(['fresh', 'old']);
-    expect(shop.series[1]).toMatchObject({ parts: ['Gather'], minutes: 60, piece: { figures: { ends: 82 }, cloth: { title: 'Low Tide' } } });
+    expect(shop.series[1]).toMatchObject({ parts: ['Gather'], minutes: 60, piece: { figures: { loomInsideMm: 450 }, cloth: { title: 'Low Tide' } } });
     expect(shop.series[0]?.piece).toBeNull();
     expect(shop).toMatchObject({ total: 2, page: 1, pages: 1, choices: { open: 2, currency: 'EUR' } });
     expect(fresh.state).toBe('published');
@@ -46,8 +47,9 @@ describe('what hangs at the shop front', () => {
   test('a piece that changes is reckoned anew', async () => {
     const series = await described(await buildSeries(), 400);
     expect((await shopSeries({})).series[0]?.piece?.figures.loomInsideMm).toBe(450);
-    const piece = await PatternPiece.findByPk(series.id);
-    await piece?.update({ data: { ...piece.data, size: { ...piece.data.size, widthMm: 300 } }, revision: 1 });
+    const piece = await PatternPiece.findByPk(series.id, { rejectOnEmpty: true });
+    const data = piece.data as FrameLoomPiece;
+    await piece.update({ data: { ...data, size: { ...data.size, widthMm: 300 } }, revision: 1 });
     expect((await shopSeries({})).series[0]?.piece?.figures.loomInsideMm).toBeLessThan(360);
   });
 

@@ -30,6 +30,14 @@ export interface HowReckoned {
   readonly trust: Trust;
 }
 
+/** An amount before it is asked for by a key. */
+export interface Reckoned {
+  /** What it is, in words: `Warp ends`. */
+  readonly label: string;
+  readonly quantity: Quantity;
+  readonly how: HowReckoned;
+}
+
 interface AmountFacts {
   readonly key: string;
   /** What it is, in words: `Warp ends`. */

@@ -1,6 +1,6 @@
 /** Amounts of one band, asked for by its name. */
-import { countOf, lengthOf, type HowReckoned, type Input, type Quantity } from '#core/craft/amounts/amount-types.ts';
-import { beatTrust, type PlannedPiece, type Reckoned } from '#core/craft/amounts/fixed-amounts.ts';
+import { countOf, lengthOf, type HowReckoned, type Input, type Quantity, type Reckoned } from '#core/craft/amounts/amount-types.ts';
+import { beatTrust, type PlannedPiece } from '#core/craft/amounts/fixed-amounts.ts';
 import { loftTrust } from '#core/craft/amounts/yarn-amounts.ts';
 import type { Band } from '#core/craft/piece.ts';
 import type { BandPlan } from '#core/craft/plan-types.ts';

@@ -6,28 +6,22 @@ import {
   lengthOf,
   massOf,
   type HowReckoned,
-  type Quantity,
+  type Reckoned,
 } from '#core/craft/amounts/amount-types.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { leastTrust, type Trust } from '#core/craft/trust.ts';
 
-export interface Reckoned {
-  readonly label: string;
-  readonly quantity: Quantity;
-  readonly how: HowReckoned;
-}
-
 export interface PlannedPiece {
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
 }
 
 type FixedAmount = (of: PlannedPiece) => Reckoned | undefined;
 
 /** A swatch that was counted beats the rule of thumb for how close rows lie. */
-export function beatTrust({ beat }: Piece): Trust {
+export function beatTrust({ beat }: FrameLoomPiece): Trust {
   return beat.picksPerCm === undefined ? 'formula' : 'measured';
 }
 

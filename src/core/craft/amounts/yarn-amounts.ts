@@ -1,6 +1,6 @@
 /** Amounts of one weft yarn: length, mass, balls, and how far a filled shuttle goes. */
-import { countOf, lengthOf, massOf, type HowReckoned } from '#core/craft/amounts/amount-types.ts';
-import { beatTrust, type PlannedPiece, type Reckoned } from '#core/craft/amounts/fixed-amounts.ts';
+import { countOf, lengthOf, massOf, type HowReckoned, type Reckoned } from '#core/craft/amounts/amount-types.ts';
+import { beatTrust, type PlannedPiece } from '#core/craft/amounts/fixed-amounts.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import type { YarnPlan } from '#core/craft/plan-types.ts';

@@ -2,8 +2,8 @@
 import type { ClothBand, EndSpan, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { NEUTRAL, mix, shade, yarnColour } from '#core/craft/cloth/colour.ts';
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
-import type { Band, Piece, Shape, Yarn } from '#core/craft/piece.ts';
-import type { BandPlan, Plan } from '#core/craft/plan.ts';
+import type { Band, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
+import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
 
@@ -12,7 +12,7 @@ const BARE_WARP = '#d8d2c1';
 const UNKNOWN_COVER = 0.7;
 
 /** `plan` must be the plan of `piece`; a band the plan does not know is left out. */
-export function clothPieceOf(piece: Piece, plan: Plan, title: string): WovenPiece {
+export function clothPieceOf(piece: FrameLoomPiece, plan: FrameLoomPlan, title: string): WovenPiece {
   const plans = new Map(plan.bands.map((band) => [band.index, band]));
   const bands = piece.bands.flatMap((band, index) => {
     const planned = plans.get(index);
@@ -43,13 +43,13 @@ interface NamedColour {
 }
 
 /** A role's colour and its name in a word or two: the last part of its label, or the role itself. */
-function roleOf(role: string, piece: Piece): NamedColour {
+function roleOf(role: string, piece: FrameLoomPiece): NamedColour {
   const yarn: Yarn | undefined = Object.hasOwn(piece.yarns, role) ? piece.yarns[role] : undefined;
   const label = yarn?.label?.split(',').at(-1)?.trim();
   return { colour: yarn === undefined ? NEUTRAL : yarnColour(yarn.colour), yarn: label === undefined || label === '' ? role : label };
 }
 
-function bandOf(band: Band, planned: BandPlan, index: number, piece: Piece, plan: Plan): ClothBand {
+function bandOf(band: Band, planned: BandPlan, index: number, piece: FrameLoomPiece, plan: FrameLoomPlan): ClothBand {
   const base = { name: band.name, heightMm: planned.heightMm, ...roleOf(band.yarn, piece) };
   switch (band.technique) {
     case 'tabby': {
@@ -91,7 +91,7 @@ function soumakShare(rows: number, between: number, heightMm: number, pickSpacin
 }
 
 /** Pile stands on the tabby it is woven into: that of the nearest tabby band, before or after it. */
-function groundOf(index: number, piece: Piece): string {
+function groundOf(index: number, piece: FrameLoomPiece): string {
   for (let step = 1; step < piece.bands.length; step++) {
     for (const near of [piece.bands[index - step], piece.bands[index + step]]) {
       if (near?.technique === 'tabby') return roleOf(near.yarn, piece).colour;

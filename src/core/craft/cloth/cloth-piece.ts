@@ -4,6 +4,7 @@
  * Bands come in the order they are woven. All counts are the real ones; how many threads a picture can show is the
  * drawing's own affair.
  */
+import type { Units } from '#core/units/units.ts';
 
 export interface WovenPiece {
   readonly kind: 'woven';
@@ -30,27 +31,37 @@ export interface LoomOutline {
   readonly bottomMm: number;
 }
 
-/** Knotted cords that hang side by side. */
-export interface CordPiece {
-  readonly kind: 'cords';
+/** Something knotted or tied that hangs: nothing in it is woven. x grows to the right from its left edge, y down from below the rod. */
+export interface HungPiece {
+  readonly kind: 'hung';
   readonly title: string;
   readonly thing: string;
   readonly widthMm: number;
-  readonly lengthMm: number;
-  readonly seed: number;
-  readonly cords: readonly Cord[];
+  /** Below the rod. */
+  readonly heightMm: number;
+  readonly rod: { readonly kind: 'rod'; readonly diameterMm: number } | { readonly kind: 'ring'; readonly diameterMm: number; readonly thickMm: number };
+  /** The same in words, without its title: "six cords of 4 mm, 80 cm long: …" */
+  readonly words: Readonly<Record<Units, string>>;
+  /** What comes again and again, drawn once. */
+  readonly motifs: readonly (readonly HungStrand[])[];
+  /** From the back to the front. */
+  readonly laid: readonly (HungStrand | PlacedMotif | 'rod')[];
 }
 
-export interface Cord {
+/** A stretch of cord or yarn. `way` is x and y of its beginning, then six numbers for each curve: two points that draw it, and where it ends. */
+export interface HungStrand {
   readonly colour: string;
   readonly widthMm: number;
-  /** Knotted part as a share (0..1) of the piece's length; the rest hangs loose. */
-  readonly knotted: number;
-  /** Square knots in a run before an equal run of bare cord; none: knotted without a break. */
-  readonly run?: number;
+  readonly way: readonly number[];
 }
 
-export type ClothPiece = WovenPiece | CordPiece;
+export interface PlacedMotif {
+  readonly motif: number;
+  readonly xMm: number;
+  readonly yMm: number;
+}
+
+export type ClothPiece = WovenPiece | HungPiece;
 
 interface BandBase {
   /** How texts refer to the band, if it has a name. */

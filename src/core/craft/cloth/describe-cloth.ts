@@ -11,10 +11,7 @@ import type { Units } from '#core/units/units.ts';
  */
 export function describeCloth(piece: ClothPiece, view: Pick<ClothView, 'woven' | 'units'> = {}): string {
   const units = view.units ?? 'cm';
-  if (piece.kind === 'cords') {
-    const count = piece.cords.length;
-    return `${piece.title}, ${piece.thing}, ${length(piece.lengthMm, units)} long: ${count === 1 ? 'one knotted cord' : `${count} knotted cords`}.`;
-  }
+  if (piece.kind === 'hung') return `${piece.title}, ${piece.thing}, ${piece.words[units]}`;
   const bands = piece.bands.filter((band) => band.technique !== 'heading').map((band) => bandWords(band, units));
   const order = bands.length === 0 ? '' : ` In the order it is woven: ${bands.join(', ')}.`;
   return `${piece.title}, ${piece.thing}, ${length(piece.widthMm, units)} wide.${order}${progressWords(piece, view.woven ?? 1, units)}`;

@@ -8,13 +8,13 @@ import { coloursOf } from '#core/craft/cloth/bands/draw-band.ts';
 import { ryaFall } from '#core/craft/cloth/bands/rya.ts';
 import { chanceFrom } from '#core/craft/cloth/chance.ts';
 import { hangingBox } from '#core/craft/cloth/cloth-box.ts';
-import { wovenHeightMm, type ClothPiece, type CordPiece, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { wovenHeightMm, type ClothPiece, type HungPiece, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { checkView, detailOf, type ClothView } from '#core/craft/cloth/cloth-view.ts';
-import { drawCords } from '#core/craft/cloth/cords.ts';
 import { describeCloth } from '#core/craft/cloth/describe-cloth.ts';
 import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { drawFellLine } from '#core/craft/cloth/fell-line.ts';
 import { drawCastShadow, drawDowel } from '#core/craft/cloth/hanging.ts';
+import { drawHung } from '#core/craft/cloth/hung.ts';
 import { layBands, type DrawnBands } from '#core/craft/cloth/lay-bands.ts';
 import { layOnLoom } from '#core/craft/cloth/lay-on-loom.ts';
 import { drawFrame, drawShuttle, drawSpacerCard, drawWarpOnNails } from '#core/craft/cloth/loom-frame.ts';
@@ -33,7 +33,7 @@ interface Picture {
 /** Throws `RangeError` for a view that cannot be drawn (no id, no width); never for what a piece holds. */
 export function drawCloth(piece: ClothPiece, view: ClothView): string {
   checkView(view);
-  const picture = piece.kind === 'cords' ? hangCords(piece, view) : drawWoven(piece, view);
+  const picture = piece.kind === 'hung' ? hangKnotted(piece, view) : drawWoven(piece, view);
   return wrap(picture, piece, view);
 }
 
@@ -180,15 +180,11 @@ function lay(piece: WovenPiece, view: ClothView): Picture {
   return { width: view.width, height, body, defs: defsOf(piece, weave, bands.clip) };
 }
 
-function hangCords(piece: CordPiece, view: ClothView): Picture {
-  const inset = Math.max(6, view.width * 0.03);
+/** Knotted work hangs in every view: it never stands in a frame. */
+function hangKnotted(piece: HungPiece, view: ClothView): Picture {
+  const inset = Math.max(2, view.width * 0.03);
   const scale = view.pxPerMm ?? (view.width - 2 * inset) / piece.widthMm;
-  const top = Math.max(14, view.width * 0.12);
-  const height = view.height ?? piece.lengthMm * scale;
-  const paths = new PathStore(view.id);
-  const cords = drawCords(piece, { width: view.width - 2 * inset, height, rise: top * 0.3, pxPerMm: scale }, paths);
-  const body = drawDowel(view.width, inset * 0.1, top) + `<g transform="translate(${num(inset)} ${num(top)})">${cords}</g>`;
-  return { width: view.width, height: height + top, body, defs: paths.defs() };
+  return { width: view.width, ...drawHung(piece, { id: view.id, width: view.width, scale }) };
 }
 
 function wrap(picture: Picture, piece: ClothPiece, view: ClothView): string {

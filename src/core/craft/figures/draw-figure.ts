@@ -1,8 +1,8 @@
 /** A technique as an SVG string, part-way or done, with this person's amounts. Pure and repeatable, as the cloth is. */
 import { escapeWords } from '#core/craft/cloth/markup.ts';
 import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
-import { FIGURE_WIDTH, type FigureInput } from '#core/craft/figures/figure.ts';
-import { FIGURES } from '#core/craft/figures/figures.ts';
+import { FIGURE_WIDTH } from '#core/craft/figures/figure.ts';
+import { figureOf, type AnyFigureInput } from '#core/craft/figures/figures.ts';
 import { Scene } from '#core/craft/figures/kit/scene.ts';
 
 export interface FigureOptions {
@@ -17,8 +17,8 @@ export interface FigureOptions {
 const DAY_SHEET = '#f0f3f2';
 
 /** @param progress how far the movement has come, 0..1; outside of that it counts as 0 or 1 */
-export function drawFigure(kind: FigureKind, input: FigureInput, progress = 1, options: FigureOptions = {}): string {
-  const figure = FIGURES[kind];
+export function drawFigure(kind: FigureKind, given: AnyFigureInput, progress = 1, options: FigureOptions = {}): string {
+  const { figure, input } = figureOf(kind, given);
   const scene = new Scene(options.id ?? kind);
   figure.draw(scene, input, Math.max(0, Math.min(1, progress)));
   const ground = options.standalone === true ? `<path d="M0 0H${FIGURE_WIDTH}V${figure.height}H0z" fill="${DAY_SHEET}"/>` : '';

@@ -1,36 +1,10 @@
-/** The technique figures a lesson can ask for by name. */
+/** The technique figures a lesson can ask for by name: those of every craft. */
+import { CRAFT_NAMES, CRAFTS, type CraftName } from '#core/craft/crafts.ts';
 
-export const FIGURE_KINDS = [
-  'warping',
-  'doubled-ends',
-  'spacer-card',
-  'tabby',
-  'selvedge',
-  'hem-stitch',
-  'rya-knot',
-  'wedge',
-  'slit',
-  'soumak',
-  'roving',
-  'shed-stick',
-  'butterfly',
-  'cutting-off',
-  'overhand-knot',
-  'hanging',
-  'weave-in',
-  'measure-wraps',
-  'card-width',
-  'basket',
-  'doubled-weft',
-  'loop-pile',
-  'twining',
-  'dovetail',
-  'interlock',
-  'fringe-knot',
-  'twisted-fringe',
-] as const;
+export type FigureKind = { [N in CraftName]: keyof (typeof CRAFTS)[N]['figures'] }[CraftName];
 
-export type FigureKind = (typeof FIGURE_KINDS)[number];
+/** In the order of the crafts. */
+export const FIGURE_KINDS = CRAFT_NAMES.flatMap((name) => Object.keys(CRAFTS[name].figures)) as [FigureKind, ...FigureKind[]];
 
 export function isFigureKind(name: string): name is FigureKind {
   return FIGURE_KINDS.some((kind) => kind === name);

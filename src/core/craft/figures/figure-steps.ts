@@ -1,7 +1,6 @@
 /** A figure step by step: where in its movement each step is done. */
-import type { FigureInput, FigureStep } from '#core/craft/figures/figure.ts';
 import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
-import { FIGURES } from '#core/craft/figures/figures.ts';
+import { figureStepsOf, type AnyFigureInput } from '#core/craft/figures/figures.ts';
 
 export interface StepAt {
   readonly words: string;
@@ -10,8 +9,8 @@ export interface StepAt {
 }
 
 /** The steps of a figure in their order; the last one is done at 1. */
-export function stepsOf(kind: FigureKind, input: FigureInput): readonly StepAt[] {
-  const steps: readonly FigureStep[] = FIGURES[kind].steps(input);
+export function stepsOf(kind: FigureKind, input: AnyFigureInput): readonly StepAt[] {
+  const steps = figureStepsOf(kind, input);
   const total = steps.reduce((sum, { weight }) => sum + weight, 0);
   let done = 0;
   return steps.map(({ words, weight }, index) => {

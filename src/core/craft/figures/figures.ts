@@ -1,59 +1,44 @@
-/** All figures by name; a further one is a further line here. */
+/** Every figure, with a piece that fills it. */
+import { CRAFT_NAMES, CRAFTS, craftOf, type CraftName, type Piece, type Plan } from '#core/craft/crafts.ts';
+import type { Figure, FigureInput, FigureStep } from '#core/craft/figures/figure.ts';
 import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
-import type { Figure } from '#core/craft/figures/figure.ts';
-import { BUTTERFLY } from '#core/craft/figures/kinds/butterfly.ts';
-import { CARD_WIDTH } from '#core/craft/figures/kinds/card-width.ts';
-import { CUTTING_OFF } from '#core/craft/figures/kinds/cutting-off.ts';
-import { DOUBLED_ENDS } from '#core/craft/figures/kinds/doubled-ends.ts';
-import { DOVETAIL } from '#core/craft/figures/kinds/dovetail.ts';
-import { FRINGE_KNOT } from '#core/craft/figures/kinds/fringe-knot.ts';
-import { HANGING } from '#core/craft/figures/kinds/hanging.ts';
-import { HEM_STITCH } from '#core/craft/figures/kinds/hem-stitch.ts';
-import { INTERLOCK } from '#core/craft/figures/kinds/interlock.ts';
-import { LOOP_PILE } from '#core/craft/figures/kinds/loop-pile.ts';
-import { MEASURE_WRAPS } from '#core/craft/figures/kinds/measure-wraps.ts';
-import { OVERHAND_KNOT } from '#core/craft/figures/kinds/overhand-knot.ts';
-import { BASKET, DOUBLED_WEFT } from '#core/craft/figures/kinds/pairs.ts';
-import { ROVING } from '#core/craft/figures/kinds/roving.ts';
-import { RYA_KNOT } from '#core/craft/figures/kinds/rya-knot.ts';
-import { SELVEDGE } from '#core/craft/figures/kinds/selvedge.ts';
-import { SHED_STICK } from '#core/craft/figures/kinds/shed-stick.ts';
-import { SLIT } from '#core/craft/figures/kinds/slit.ts';
-import { SOUMAK } from '#core/craft/figures/kinds/soumak.ts';
-import { SPACER_CARD } from '#core/craft/figures/kinds/spacer-card.ts';
-import { TABBY } from '#core/craft/figures/kinds/tabby.ts';
-import { TWINING } from '#core/craft/figures/kinds/twining.ts';
-import { TWISTED_FRINGE } from '#core/craft/figures/kinds/twisted-fringe.ts';
-import { WARPING } from '#core/craft/figures/kinds/warping.ts';
-import { WEAVE_IN } from '#core/craft/figures/kinds/weave-in.ts';
-import { WEDGE } from '#core/craft/figures/kinds/wedge.ts';
+import { planPiece } from '#core/craft/plan.ts';
 
-export const FIGURES: Readonly<Record<FigureKind, Figure>> = {
-  warping: WARPING,
-  'doubled-ends': DOUBLED_ENDS,
-  'spacer-card': SPACER_CARD,
-  tabby: TABBY,
-  selvedge: SELVEDGE,
-  'hem-stitch': HEM_STITCH,
-  'rya-knot': RYA_KNOT,
-  wedge: WEDGE,
-  slit: SLIT,
-  soumak: SOUMAK,
-  roving: ROVING,
-  'shed-stick': SHED_STICK,
-  butterfly: BUTTERFLY,
-  'cutting-off': CUTTING_OFF,
-  'overhand-knot': OVERHAND_KNOT,
-  hanging: HANGING,
-  'weave-in': WEAVE_IN,
-  'measure-wraps': MEASURE_WRAPS,
-  'card-width': CARD_WIDTH,
-  basket: BASKET,
-  'doubled-weft': DOUBLED_WEFT,
-  'loop-pile': LOOP_PILE,
-  twining: TWINING,
-  dovetail: DOVETAIL,
-  interlock: INTERLOCK,
-  'fringe-knot': FRINGE_KNOT,
-  'twisted-fringe': TWISTED_FRINGE,
-};
+/** What any figure may be asked with: a figure of another craft than the piece's shows that craft's example. */
+export type AnyFigureInput = FigureInput<Piece, Plan>;
+
+const craftWith = (kind: FigureKind): CraftName => CRAFT_NAMES.find((name) => Object.hasOwn(CRAFTS[name].figures, kind)) ?? 'frame-loom';
+
+const examples = new Map<CraftName, AnyFigureInput>();
+
+/** Reckoned once: it never changes. */
+function exampleOf(craft: CraftName, input: AnyFigureInput): AnyFigureInput {
+  const known = examples.get(craft);
+  if (known !== undefined) return { ...known, units: input.units };
+  const piece = CRAFTS[craft].example;
+  const plan = planPiece(piece);
+  if (!plan.ok) throw new Error(`the example of ${craft} cannot be made: ${plan.problems[0]?.message ?? ''}`);
+  const example: AnyFigureInput = { piece, plan: plan.value, units: input.units };
+  examples.set(craft, example);
+  return example;
+}
+
+/** The figure of this name, and what it is drawn from. */
+export function figureOf(kind: FigureKind, input: AnyFigureInput): { readonly figure: Figure<Piece, Plan>; readonly input: AnyFigureInput } {
+  const craft = craftWith(kind);
+  const figure = craftOf({ craft }).figures[kind];
+  if (figure === undefined) throw new RangeError(`no figure is called ${kind}`);
+  return { figure, input: input.piece.craft === craft ? input : exampleOf(craft, input) };
+}
+
+/** Its movements one after another. */
+export function figureStepsOf(kind: FigureKind, given: AnyFigureInput): readonly FigureStep[] {
+  const { figure, input } = figureOf(kind, given);
+  return figure.steps(input);
+}
+
+/** The same movement in words, with the amounts. */
+export function figureWords(kind: FigureKind, given: AnyFigureInput): string {
+  const { figure, input } = figureOf(kind, given);
+  return figure.describe(input);
+}

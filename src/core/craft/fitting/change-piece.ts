@@ -7,7 +7,7 @@ import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import { scalePiece } from '#core/craft/fitting/scale-piece.ts';
 import type { FitWay } from '#core/craft/fitting/way.ts';
 import { isAboveZero, widen } from '#core/craft/fitting/widen.ts';
-import type { Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
+import type { Loom, FrameLoomPiece, Warp, Yarn } from '#core/craft/piece.ts';
 
 /**
  * Which nails of her own loom come closest to the pattern's spacing: a loom with nails
@@ -47,7 +47,7 @@ function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
 }
 
 /** Her yarn takes the pattern's colour where she has not said her own, so that the picture stays readable. */
-function changeYarns(pattern: Piece['yarns'], mine: NonNullable<MyPiece['yarns']>): Piece['yarns'] {
+function changeYarns(pattern: FrameLoomPiece['yarns'], mine: NonNullable<MyPiece['yarns']>): FrameLoomPiece['yarns'] {
   const entries = Object.entries(pattern).map(([role, patternYarn]): [string, Yarn] => {
     const own = Object.hasOwn(mine, role) ? mine[role] : undefined;
     if (own === undefined) return [role, patternYarn];
@@ -56,12 +56,7 @@ function changeYarns(pattern: Piece['yarns'], mine: NonNullable<MyPiece['yarns']
   return Object.fromEntries(entries);
 }
 
-/** Roles she has a yarn for that the pattern does not know. */
-export function unknownRoles(pattern: Piece, mine: MyPiece): readonly string[] {
-  return Object.keys(mine.yarns ?? {}).filter((role) => !Object.hasOwn(pattern.yarns, role));
-}
-
-function fitInWay(piece: Piece, way: FitWay): Piece {
+function fitInWay(piece: FrameLoomPiece, way: FitWay): FrameLoomPiece {
   switch (way.kind) {
     case 'narrower':
       return widen(piece, way.widthMm);
@@ -78,8 +73,8 @@ function fitInWay(piece: Piece, way: FitWay): Piece {
  * `pattern` must have been read. Whatever a student typed goes in as it is, her way of fitting it last; planning the
  * piece tells what is wrong with it.
  */
-export function changePiece(pattern: Piece, mine: MyPiece): Piece {
-  const changed: Piece = {
+export function changePiece(pattern: FrameLoomPiece, mine: MyPiece): FrameLoomPiece {
+  const changed: FrameLoomPiece = {
     ...pattern,
     loom: changeLoom(pattern.loom, mine.loom),
     warp: changeWarp(pattern.warp, mine),

@@ -1,7 +1,7 @@
 /** A lower piece: the band that fills shrinks first, then whole bands are left out. The hem-stitch stays. */
 import { bandKey } from '#core/craft/fitting/way.ts';
 import { ownHeights } from '#core/craft/frame-loom/own-heights.ts';
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 
 /** A filling band lower than a finger is wide is no sky any more: rather one band less. */
 const LEAST_FILL_MM = 10;
@@ -10,7 +10,7 @@ const LEAST_FILL_MM = 10;
 export const fills = (band: Band): boolean => 'fill' in band;
 
 /** As high as its bands come to, where none of them fills. */
-export function withOwnHeight(piece: Piece): Piece {
+export function withOwnHeight(piece: FrameLoomPiece): FrameLoomPiece {
   if (piece.bands.some(fills)) return piece;
   const heights = ownHeights(piece);
   if (heights === undefined) return piece;
@@ -19,7 +19,7 @@ export function withOwnHeight(piece: Piece): Piece {
 }
 
 /** `piece` without the bands of these keys, at this height if a band fills what is left. Keys it does not know do nothing. */
-export function leaveOut(piece: Piece, keys: readonly string[], heightMm: number | undefined): Piece {
+export function leaveOut(piece: FrameLoomPiece, keys: readonly string[], heightMm: number | undefined): FrameLoomPiece {
   const bands = piece.bands.filter((band, index) => !keys.includes(bandKey(band, index)));
   const lower = { ...piece, bands, size: { ...piece.size, heightMm: heightMm ?? piece.size.heightMm } };
   return withOwnHeight(lower);
@@ -32,7 +32,7 @@ export interface Lower {
 }
 
 /** Bands that may go, in the order in which they do. */
-function mayGo(piece: Piece, from: 'first' | 'last'): readonly number[] {
+function mayGo(piece: FrameLoomPiece, from: 'first' | 'last'): readonly number[] {
   const indices = piece.bands.flatMap((band, index) => (band.technique === 'hem-stitch' || fills(band) ? [] : [index]));
   return from === 'first' ? indices : indices.toReversed();
 }
@@ -41,7 +41,7 @@ function mayGo(piece: Piece, from: 'first' | 'last'): readonly number[] {
  * What `piece` must leave to be at most `roomMm` high. `order` is the end from which bands go, or the keys of those
  * that do whatever the room is; undefined where too little would be left.
  */
-export function lowerTo(piece: Piece, roomMm: number, order: 'first' | 'last' | readonly string[], stepMm: number): Lower | undefined {
+export function lowerTo(piece: FrameLoomPiece, roomMm: number, order: 'first' | 'last' | readonly string[], stepMm: number): Lower | undefined {
   const heights = ownHeights(piece);
   if (heights === undefined) return undefined;
   const filling = piece.bands.findIndex(fills);

@@ -1,7 +1,7 @@
 /** A whole piece larger or smaller by one factor. Yarns and loom stay; rows are counted anew. */
 import { withOwnHeight } from '#core/craft/fitting/leave-out.ts';
 import { isAboveZero } from '#core/craft/fitting/widen.ts';
-import type { Band, Piece, Shape } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece, Shape } from '#core/craft/piece.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 
 function scaleMeasures(shape: Shape, k: number): Shape {
@@ -50,7 +50,7 @@ function scaleBand(band: Band, k: number): Band {
 }
 
 /** Width, heights, shapes and pile of `piece` times `factor`; where no band fills, the height is what the bands come to. */
-export function scalePiece(piece: Piece, factor: number): Piece {
+export function scalePiece(piece: FrameLoomPiece, factor: number): FrameLoomPiece {
   const { dowel, size } = piece;
   // A width that is no number must be refused as it is, not made into one.
   if (!isAboveZero(size.widthMm)) return piece;

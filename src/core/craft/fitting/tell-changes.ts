@@ -1,16 +1,16 @@
 /** How a student's piece differs from the pattern, in words. */
 import { fills } from '#core/craft/fitting/leave-out.ts';
 import { bandKey } from '#core/craft/fitting/way.ts';
-import type { Band, Piece } from '#core/craft/piece.ts';
-import type { BandPlan, Plan } from '#core/craft/plan-types.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
+import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { lengthOf, type LengthUse } from '#core/craft/amounts/amount-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { loomKind } from '#core/craft/looms/looms.ts';
 import type { Units } from '#core/units/units.ts';
 
 export interface Made {
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
 }
 
 /** A difference that cannot be seen is none. */
@@ -30,23 +30,23 @@ export function listed(words: readonly string[]): string {
   return words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;
 }
 
-function nailWords({ loom }: Piece): string {
+function nailWords({ loom }: FrameLoomPiece): string {
   const nth = loom.everyNthNail ?? 1;
   const inner = loomKind(loom).rows === 2 && loom.nailRows === 'inner' ? 'inner ' : '';
   const nail = `${inner}${loomKind(loom).holder.one}`;
   return nth === 1 ? `every ${nail}` : `every ${ordinal(nth)} ${nail}`;
 }
 
-const sumOf = (plan: Plan, of: (band: BandPlan) => number | undefined): number => plan.bands.reduce((sum, band) => sum + (of(band) ?? 0), 0);
+const sumOf = (plan: FrameLoomPlan, of: (band: BandPlan) => number | undefined): number => plan.bands.reduce((sum, band) => sum + (of(band) ?? 0), 0);
 
-function soumakRows({ bands }: Piece): number {
+function soumakRows({ bands }: FrameLoomPiece): number {
   return bands.reduce((sum, band) => sum + (band.technique === 'soumak' ? band.rows : 0), 0);
 }
 
 /** Two roles may have yarn of one name, so the role is told with it. */
 const yarnName = (role: string, label: string | undefined): string => (label === undefined ? `the ${role} yarn` : `${label} (${role})`);
 
-function tellYarns(before: Piece, after: Piece): string[] {
+function tellYarns(before: FrameLoomPiece, after: FrameLoomPiece): string[] {
   return Object.entries(after.yarns).flatMap(([role, yarn]) => {
     const was = before.yarns[role];
     if (yarn === was) return [];

@@ -8,7 +8,7 @@ import { spacingOf, strandsAsTight } from '#core/craft/fitting/coarsen.ts';
 import { lowerTo } from '#core/craft/fitting/leave-out.ts';
 import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
 import type { FitWay } from '#core/craft/fitting/way.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { Outcome, Problem } from '#core/outcome.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
 import type { Units } from '#core/units/units.ts';
@@ -21,7 +21,7 @@ export interface WayToFit {
   readonly id: WayId;
   /** What is kept when it is chosen; undefined for the pattern as it is on her loom. */
   readonly way: FitWay | undefined;
-  readonly outcome: Outcome<FittedPiece>;
+  readonly outcome: Outcome<FittedPiece<FrameLoomPiece>>;
 }
 
 /** Narrower than this nobody would call it the same piece. */
@@ -41,13 +41,13 @@ export const stepMm = (units: Units): number => (units === 'in' ? MM_PER_INCH / 
 const refused = (message: string, path = '/loom'): Outcome<never> => ({ ok: false, problems: [{ code: 'E_FIT', path, message }] });
 
 interface Asked {
-  readonly pattern: Piece;
+  readonly pattern: FrameLoomPiece;
   /** Without a way. */
   readonly mine: MyPiece;
   readonly units: Units;
-  readonly base: Outcome<FittedPiece>;
+  readonly base: Outcome<FittedPiece<FrameLoomPiece>>;
   /** The pattern on her loom, not yet fitted. */
-  readonly onLoom: Piece;
+  readonly onLoom: FrameLoomPiece;
 }
 
 const isAt = (path: string) => (problem: Problem): boolean => problem.code === 'E_FIT' && problem.path === path;
@@ -55,13 +55,13 @@ const stands = ({ base }: Asked, path: string): boolean => !base.ok && base.prob
 const isTooNarrow = (asked: Asked): boolean => stands(asked, '/loom/insideWidthMm');
 const isTooLow = (asked: Asked): boolean => stands(asked, '/loom/insideHeightMm') || stands(asked, '/bands');
 
-const fitIn = ({ pattern, mine, units }: Asked, way: FitWay): Outcome<FittedPiece> => fitPiece(pattern, { ...mine, way }, units);
+const fitIn = ({ pattern, mine, units }: Asked, way: FitWay): Outcome<FittedPiece<FrameLoomPiece>> => fitPiece(pattern, { ...mine, way }, units);
 
 /**
  * The widest piece that her loom holds, in whole steps of a rule; undefined where the loom does not tell its width or
  * nothing worth weaving fits. `others` are the problems it may still have.
  */
-export function widestOn(pattern: Piece, mine: MyPiece, units: Units): number | undefined {
+export function widestOn(pattern: FrameLoomPiece, mine: MyPiece, units: Units): number | undefined {
   const roomMm = roomOnLoom(changePiece(pattern, mine)).widthMm;
   if (roomMm === undefined) return undefined;
   const step = stepMm(units);
@@ -140,14 +140,14 @@ function scaled(asked: Asked): WayToFit[] {
 }
 
 /** Whether a way can help: what is wrong is the loom's room or a yarn too thick for its spacing, not something mistyped. */
-const canBeHelped = (base: Outcome<FittedPiece>): boolean => base.ok || base.problems.every(({ code }) => code === 'E_FIT' || code === 'E_JAM');
+const canBeHelped = (base: Outcome<FittedPiece<FrameLoomPiece>>): boolean => base.ok || base.problems.every(({ code }) => code === 'E_FIT' || code === 'E_JAM');
 
 /**
  * Every way that may be chosen for this loom; the pattern as it is comes first. `chosen` are the keys of bands she would
  * rather leave out herself. `mine.way` is not looked at. Where something mistyped stands in the way there is only the
  * first, with its problems.
  */
-export function waysToFit(pattern: Piece, { way: _, ...mine }: MyPiece, units: Units = 'cm', chosen: readonly string[] = []): readonly WayToFit[] {
+export function waysToFit(pattern: FrameLoomPiece, { way: _, ...mine }: MyPiece, units: Units = 'cm', chosen: readonly string[] = []): readonly WayToFit[] {
   const base = fitPiece(pattern, mine, units);
   const asItIs: WayToFit = { id: 'as-it-is', way: undefined, outcome: base };
   if (!canBeHelped(base)) return [asItIs];

@@ -1,5 +1,5 @@
 /** A piece made narrower or wider: shapes keep their share of the width, the dowel stands out as far as before. */
-import type { Band, Piece, Shape } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece, Shape } from '#core/craft/piece.ts';
 
 export const isAboveZero = (x: unknown): x is number => typeof x === 'number' && Number.isFinite(x) && x > 0;
 
@@ -29,7 +29,7 @@ function widenBand(band: Band, scale: number): Band {
 }
 
 /** `piece` at another finished width. A width that is none goes in as it is; planning the piece tells so. */
-export function widen(piece: Piece, widthMm: number): Piece {
+export function widen(piece: FrameLoomPiece, widthMm: number): FrameLoomPiece {
   const before = piece.size.widthMm;
   const scale = isAboveZero(widthMm) && isAboveZero(before) ? widthMm / before : 1;
   const { dowel } = piece;

@@ -7,9 +7,9 @@ import type { Settings } from '#core/craft/frame-loom/settings.ts';
 import type { StackedBand } from '#core/craft/frame-loom/stack-bands.ts';
 import { cordLength, cordSpan, dowelLength, lashingLength, lashingWraps, leastDowelDiameter } from '#core/craft/hanging.ts';
 import type { Edges } from '#core/craft/frame-loom/room.ts';
-import type { Loom, Piece, Warp, Yarn } from '#core/craft/piece.ts';
+import type { Loom, FrameLoomPiece, Warp, Yarn } from '#core/craft/piece.ts';
 import { pickLength } from '#core/craft/picks.ts';
-import type { BandPlan, CutPlan, LoomPlan, Plan, WeftPlan, YarnPlan } from '#core/craft/plan-types.ts';
+import type { BandPlan, CutPlan, LoomPlan, FrameLoomPlan, WeftPlan, YarnPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
 import type { DressedLoom, LaidPicks, Woven } from '#core/craft/techniques/technique.ts';
@@ -18,7 +18,7 @@ import { hoursOf, type Work } from '#core/craft/time.ts';
 /** A piece that is sound and fits its loom, with all that adding up needs. */
 export interface PieceOnLoom {
   readonly parts: PieceParts;
-  readonly size: Piece['size'];
+  readonly size: FrameLoomPiece['size'];
   readonly loom: Loom;
   readonly warp: Warp;
   readonly edges: Edges;
@@ -112,7 +112,7 @@ export function weaveBands({ stacked, laid }: PieceOnLoom): readonly WovenBand[]
 }
 
 /** Needs at least one yarn whose picks are laid, which laying the weft has seen to. */
-export function addUp(piece: PieceOnLoom, findings: Findings): Omit<Plan, 'warnings'> {
+export function addUp(piece: PieceOnLoom, findings: Findings): Omit<FrameLoomPlan, 'warnings'> {
   const { dressed, laid, height } = piece;
   const bands = weaveBands(piece);
   const warp = countWarp(piece.warp, piece.loom, dressed, piece.settings, findings);

@@ -5,7 +5,7 @@ import type { Settings } from '#core/craft/frame-loom/settings.ts';
 import { heightBeforeShrinking } from '#core/craft/loom-height.ts';
 import { bareWarp, largestHeight, largestWidth, layoutOf, widthOfEnds, type Edges } from '#core/craft/frame-loom/room.ts';
 import { endsPerMm, nailsUsed, railNeeded, spacingRows, workingSpacing, zigzagGaps } from '#core/craft/nails.ts';
-import type { EndsTogether, Loom, Parity, Piece, Warp } from '#core/craft/piece.ts';
+import type { EndsTogether, Loom, Parity, FrameLoomPiece, Warp } from '#core/craft/piece.ts';
 import type { EndsPlan, LoomPlan } from '#core/craft/plan-types.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { diameterTogether } from '#core/craft/yarn/diameter.ts';
@@ -76,7 +76,7 @@ function checkInsideWidth(loom: Loom, warp: Warp, neededMm: number, settings: Se
 }
 
 /** Ends, spacing and nails of the warp; undefined if the width takes no sensible number of ends. */
-export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings: Settings, findings: Findings): DressedWarp | undefined {
+export function dressWarp(size: FrameLoomPiece['size'], loom: Loom, warp: Warp, settings: Settings, findings: Findings): DressedWarp | undefined {
   const demands: Demands = { together: warp.endsTogether ?? 1, parity: warp.parity ?? 'any' };
   const layout = layoutOf(loom);
   const perMm = endsPerMm(layout);
@@ -109,7 +109,7 @@ export function dressWarp(size: Piece['size'], loom: Loom, warp: Warp, settings:
 }
 
 /** Height of cloth and bare warp, against the frame. */
-export function fitHeight(size: Piece['size'], loom: Loom, warp: Warp | undefined, edges: Edges, settings: Settings, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
+export function fitHeight(size: FrameLoomPiece['size'], loom: Loom, warp: Warp | undefined, edges: Edges, settings: Settings, findings: Findings): Omit<LoomPlan, 'insideWidthNeededMm'> {
   const heightOnLoomMm = heightBeforeShrinking(size.heightMm, settings.relaxation, settings.wetShrinkage);
   const { topMm, bottomMm } = bareWarp(loom, warp, edges, settings);
   const heightNeededMm = heightOnLoomMm + topMm + bottomMm;

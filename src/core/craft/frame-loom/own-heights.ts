@@ -3,7 +3,7 @@ import { dressWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import { layOn, settingsFrom } from '#core/craft/frame-loom/plan-frame-loom.ts';
 import { readPieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import { collectRoles, isReady } from '#core/craft/frame-loom/stack-bands.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
@@ -11,7 +11,7 @@ import { techniqueOf } from '#core/craft/techniques/registry.ts';
 export type OwnHeight = number | 'fill';
 
 /** Finished heights in mm in the order of the bands; undefined where a yarn jams or something else is not sound. */
-export function ownHeights(piece: Piece): readonly OwnHeight[] | undefined {
+export function ownHeights(piece: FrameLoomPiece): readonly OwnHeight[] | undefined {
   const findings = Findings.in('cm');
   const parts = readPieceParts(Fields.of(piece, '', 'A piece', findings));
   const settings = settingsFrom(parts);

@@ -12,7 +12,7 @@ import { settingsOf, type Settings } from '#core/craft/frame-loom/settings.ts';
 import { collectRoles, stackBands, type UsedRoles } from '#core/craft/frame-loom/stack-bands.ts';
 import { finishRoom, type Edges } from '#core/craft/frame-loom/room.ts';
 import type { Warp } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { below, type Findings } from '#core/craft/reading/findings.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
@@ -88,7 +88,7 @@ export function putOnLoom(fields: Fields): PieceOnLoom | undefined {
 }
 
 /** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */
-export function planFrameLoom(fields: Fields): Omit<Plan, 'warnings'> | undefined {
+export function planFrameLoom(fields: Fields): Omit<FrameLoomPlan, 'warnings'> | undefined {
   const piece = putOnLoom(fields);
   return piece && addUp(piece, fields.findings);
 }

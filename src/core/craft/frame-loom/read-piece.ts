@@ -2,7 +2,7 @@
  * Reading a frame-loom piece. Every part is read for itself, so that all that is wrong
  * is told at once, and what is sound can still be checked against its neighbours.
  */
-import type { Allowances, Band, Beat, Dowel, Finish, FinishWay, Fixing, Loom, Piece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Beat, Dowel, Finish, FinishWay, Fixing, Loom, FrameLoomPiece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
 import type { Edges } from '#core/craft/frame-loom/room.ts';
 import type { LoomKind } from '#core/craft/looms/loom-kind.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
@@ -17,7 +17,7 @@ import { END_RANGE } from '#core/craft/ends.ts';
 
 /** The sound parts of a piece; what was refused is missing. */
 export interface PieceParts {
-  readonly size: Piece['size'] | undefined;
+  readonly size: FrameLoomPiece['size'] | undefined;
   readonly loom: Loom | undefined;
   readonly warp: Warp | undefined;
   readonly beat: Beat | undefined;
@@ -49,7 +49,7 @@ const SEED: NumberRule = { name: 'Seed of the drawing', min: 0, max: Number.MAX_
 const BEAT: NumberRule = { name: 'Picks in one weft thickness', ...BEAT_RANGE };
 const PICKS_PER_CM: NumberRule = { name: 'Picks in a centimetre', min: 'over-zero', max: 200 };
 
-function readSize(fields: Fields): Piece['size'] {
+function readSize(fields: Fields): FrameLoomPiece['size'] {
   const group = fields.group('size', 'Size');
   const size = { widthMm: group.number('widthMm', length('Width')), heightMm: group.number('heightMm', length('Height')) };
   group.end();

@@ -6,7 +6,7 @@ import { endsForFinish } from '#core/craft/hanging.ts';
 import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import { bottomAllowance, heightAfterShrinking, topAllowance } from '#core/craft/loom-height.ts';
 import { endsOnNails, endsPerMm, nailsOnRail, usedPitch, type NailLayout } from '#core/craft/nails.ts';
-import type { Finish, Loom, Piece, Warp } from '#core/craft/piece.ts';
+import type { Finish, Loom, FrameLoomPiece, Warp } from '#core/craft/piece.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
 
 export function layoutOf(loom: Pick<Loom, 'kind' | 'nailPitchMm' | 'nailRows' | 'everyNthNail' | 'warping'>): NailLayout {
@@ -28,7 +28,7 @@ export function largestWidth(loom: Loom, warp: Pick<Warp, 'endsTogether' | 'pari
 }
 
 /** How a piece ends above and below its cloth. */
-export type Edges = Pick<Piece, 'dowel' | 'finish'>;
+export type Edges = Pick<FrameLoomPiece, 'dowel' | 'finish'>;
 
 /** Warp that stays bare at both edges. A warp that could not be read leaves its knots out. */
 export function bareWarp(loom: Loom, warp: Pick<Warp, 'yarn'> | undefined, { dowel, finish }: Edges, settings: Settings): { readonly topMm: number; readonly bottomMm: number } {

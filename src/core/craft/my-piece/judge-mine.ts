@@ -3,7 +3,7 @@ import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
 import { waysToFit, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
-import type { EndsTogether, LoomKindName, NailRows, Piece, Warping } from '#core/craft/piece.ts';
+import type { EndsTogether, LoomKindName, NailRows, FrameLoomPiece, Warping } from '#core/craft/piece.ts';
 import { readText } from '#core/craft/piece-form/field-text.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
@@ -21,10 +21,10 @@ export interface MineFound {
 }
 
 export type MineJudgement =
-  | { readonly ok: true; readonly mine: MyPiece; readonly fitted: FittedPiece; readonly warnings: readonly MineFound[] }
+  | { readonly ok: true; readonly mine: MyPiece; readonly fitted: FittedPiece<FrameLoomPiece>; readonly warnings: readonly MineFound[] }
   | { readonly ok: false; readonly problems: readonly MineFound[] };
 
-export function judgeMine(typed: TypedMine, pattern: Piece): MineJudgement {
+export function judgeMine(typed: TypedMine, pattern: FrameLoomPiece): MineJudgement {
   const faults = new Map<string, string>();
   const { mine, outcome: fitted } = inHerWay(typed, pattern, readMine(typed, pattern, faults));
   if (fitted.ok && faults.size === 0) return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern) };
@@ -34,13 +34,13 @@ export function judgeMine(typed: TypedMine, pattern: Piece): MineJudgement {
 }
 
 /** What she typed of her piece without the way of fitting it, and every way there is. */
-export function waysOf(typed: TypedMine, pattern: Piece): { readonly mine: MyPiece; readonly ways: readonly WayToFit[] } {
+export function waysOf(typed: TypedMine, pattern: FrameLoomPiece): { readonly mine: MyPiece; readonly ways: readonly WayToFit[] } {
   const mine = readMine(typed, pattern, new Map());
   return { mine, ways: waysToFit(pattern, mine, typed.units, leftOutBy(typed, pattern)) };
 }
 
 /** A way that her loom does not call for any more falls away. */
-function inHerWay(typed: TypedMine, pattern: Piece, mine: MyPiece): { readonly mine: MyPiece; readonly outcome: Outcome<FittedPiece> } {
+function inHerWay(typed: TypedMine, pattern: FrameLoomPiece, mine: MyPiece): { readonly mine: MyPiece; readonly outcome: Outcome<FittedPiece<FrameLoomPiece>> } {
   const id = wayOf(typed);
   const chosen = id === 'as-it-is' ? undefined : waysToFit(pattern, mine, typed.units, leftOutBy(typed, pattern)).find((way) => way.id === id);
   if (chosen === undefined) return { mine, outcome: fitPiece(pattern, mine, typed.units) };
@@ -70,7 +70,7 @@ function readLength(typed: TypedMine, asked: AskedLength, faults: Map<string, st
 const limitText = (mm: number, { kind }: AskedLength, units: Units): string => amountText(lengthOf(mm, kind === 'fine' ? 'fine' : 'size'), units);
 
 /** What differs from the pattern; a choice that is the pattern's own is none. */
-function readMine(typed: TypedMine, pattern: Piece, faults: Map<string, string>): MyPiece {
+function readMine(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): MyPiece {
   const length = (asked: AskedLength): number | undefined => readLength(typed, asked, faults);
   const { kind, nailRows, warping } = chosenLoom(typed);
   const together = endsOf(textOf(typed.texts, ENDS.key));
@@ -105,7 +105,7 @@ export function chosenLoom({ texts }: TypedMine): { readonly kind?: LoomKindName
 const endsOf = (text: string): EndsTogether | undefined => (text === '2' ? 2 : text === '1' ? 1 : undefined);
 
 /** Her own yarns, read as those of any piece are. */
-function readYarns(typed: TypedMine, pattern: Piece, faults: Map<string, string>): NonNullable<MyPiece['yarns']> {
+function readYarns(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): NonNullable<MyPiece['yarns']> {
   const roles = Object.keys(pattern.yarns).filter((role) => isOwnYarn(yarnOf(typed, role)));
   if (roles.length === 0) return {};
   const rows = roles.map((role, index) => ({ id: index + 1, texts: { ...yarnOf(typed, role), role } }));
@@ -131,7 +131,7 @@ const FIELD_OF: Readonly<Record<string, string>> = {
   '/size/widthMm': WIDTH.key,
 };
 
-function fieldOf(path: string, pattern: Piece): string {
+function fieldOf(path: string, pattern: FrameLoomPiece): string {
   const known = FIELD_OF[path];
   if (known !== undefined) return known;
   const [, first, role, key] = path.split('/');
@@ -140,7 +140,7 @@ function fieldOf(path: string, pattern: Piece): string {
   return `yarns.${role}.${key !== undefined && ['strands', 'wrapsPerInch', 'colour', 'label'].includes(key) ? key : 'grist'}`;
 }
 
-function placed(problems: readonly Problem[], pattern: Piece): MineFound[] {
+function placed(problems: readonly Problem[], pattern: FrameLoomPiece): MineFound[] {
   const once = [...new Map(problems.map((problem) => [`${fieldOf(problem.path, pattern)} ${problem.message}`, problem])).values()];
   return once.map(({ path, message }) => ({ field: fieldOf(path, pattern), says: message }));
 }

@@ -5,7 +5,7 @@
 import type { MyPiece } from '#core/craft/fit.ts';
 import { bandKey } from '#core/craft/fitting/way.ts';
 import { WAY_IDS, wayIdOf, type WayId } from '#core/craft/fitting/ways-to-fit.ts';
-import type { Piece, Yarn } from '#core/craft/piece.ts';
+import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { DEFAULT_KIND } from '#core/craft/looms/looms.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
@@ -27,7 +27,7 @@ export const yarnOf = (typed: TypedMine, role: string): Texts => (Object.hasOwn(
 export const isOwnYarn = (texts: Texts): boolean => !['', AS_PATTERN].includes(textOf(texts, 'by'));
 
 /** Names of the fields in which bands are left out, in the order of the pattern's bands. */
-export const leaveOutNames = (pattern: Piece): readonly string[] => pattern.bands.map((band, index) => `${LEAVE_OUT}${bandKey(band, index)}`);
+export const leaveOutNames = (pattern: FrameLoomPiece): readonly string[] => pattern.bands.map((band, index) => `${LEAVE_OUT}${bandKey(band, index)}`);
 
 /** The way she chose; the pattern as it is where she chose none. */
 export function wayOf(typed: TypedMine): WayId {
@@ -36,7 +36,7 @@ export function wayOf(typed: TypedMine): WayId {
 }
 
 /** Keys of the bands she ticked to be left out. */
-export function leftOutBy(typed: TypedMine, pattern: Piece): readonly string[] {
+export function leftOutBy(typed: TypedMine, pattern: FrameLoomPiece): readonly string[] {
   return leaveOutNames(pattern).filter((name) => textOf(typed.texts, name) === 'yes').map((name) => name.slice(LEAVE_OUT.length));
 }
 
@@ -53,7 +53,7 @@ function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
 }
 
 /** What she kept, in the words and units of her form. */
-export function typeMine(mine: MyPiece, pattern: Piece, units: Units): TypedMine {
+export function typeMine(mine: MyPiece, pattern: FrameLoomPiece, units: Units): TypedMine {
   const kept: Readonly<Record<string, unknown>> = { ...mine.loom, widthMm: mine.widthMm };
   return {
     units,
@@ -73,7 +73,7 @@ export function typeMine(mine: MyPiece, pattern: Piece, units: Units): TypedMine
 const MOST_TYPED = 200;
 
 /** The form as it was sent; what is missing is empty. `ask` gives the text under a name. */
-export function mineOfFields(ask: (name: string) => string | undefined, pattern: Piece): TypedMine {
+export function mineOfFields(ask: (name: string) => string | undefined, pattern: FrameLoomPiece): TypedMine {
   const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
@@ -96,7 +96,7 @@ export function inOtherUnits(typed: TypedMine, units: Units): TypedMine {
 }
 
 /** With the loom she tried the pattern on before she had a seat. */
-export function withTriedLoom(typed: TypedMine, loom: TypedLoom, pattern: Piece): TypedMine {
+export function withTriedLoom(typed: TypedMine, loom: TypedLoom, pattern: FrameLoomPiece): TypedMine {
   const tried = tryOnLoom(pattern, '', loom);
   const narrower = loom.narrower && tried.ok && tried.fits ? tried.mine.widthMm : undefined;
   const texts = {
@@ -110,6 +110,6 @@ export function withTriedLoom(typed: TypedMine, loom: TypedLoom, pattern: Piece)
 }
 
 /** Everything as the pattern has it. */
-export function asPattern(typed: TypedMine, pattern: Piece): TypedMine {
+export function asPattern(typed: TypedMine, pattern: FrameLoomPiece): TypedMine {
   return typeMine({}, pattern, typed.units);
 }

@@ -1,6 +1,7 @@
 /** What a form comes to: the piece and its plan, or a sentence at every field that stands in the way. */
-import type { Piece } from '#core/craft/piece.ts';
-import { planPiece, type Plan } from '#core/craft/plan.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import { planPiece } from '#core/craft/plan.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Problem } from '#core/outcome.ts';
 import { fieldOfPlace } from './field-names.ts';
 import { readTyped, type Fault } from './read-typed.ts';
@@ -15,7 +16,7 @@ export interface Found {
 }
 
 export type Judgement =
-  | { readonly ok: true; readonly piece: Piece; readonly plan: Plan; readonly warnings: readonly Found[] }
+  | { readonly ok: true; readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan; readonly warnings: readonly Found[] }
   | { readonly ok: false; readonly problems: readonly Found[] };
 
 /**
@@ -23,10 +24,11 @@ export type Judgement =
  * engine's complaint, that a value is missing there, is left out.
  */
 export function judgeTyped(typed: TypedPiece): Judgement {
-  const { piece, faults } = readTyped(typed);
+  const { piece: read, faults } = readTyped(typed);
+  // It may lack anything yet: planning it tells what.
+  const piece = read as FrameLoomPiece;
   const plan = planPiece(piece, typed.units);
-  // Reckoned without a problem, so it has the shape of a piece.
-  if (plan.ok && faults.size === 0) return { ok: true, piece: piece as Piece, plan: plan.value, warnings: placed(plan.warnings, typed) };
+  if (plan.ok && faults.size === 0) return { ok: true, piece, plan: plan.value, warnings: placed(plan.warnings, typed) };
   const own = [...faults].map(([field, fault]): Found => ({ field, ...fault }));
   const engine = plan.ok ? [] : placed(plan.problems, typed);
   const told = new Set(faults.keys());

@@ -1,5 +1,5 @@
 /** From a piece to the texts of its form. */
-import type { Band, Beat, Piece, Shape, Yarn } from '#core/craft/piece.ts';
+import type { Band, Beat, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 import { BAND_NAME, bandFields, FILL_KEY, SHAPE, shapeFields, TECHNIQUE } from './asked-of-band.ts';
@@ -57,7 +57,7 @@ function typeBand(band: Band, id: number, units: Units, idOf: IdOf): TypedBand {
 }
 
 /** The piece in the words and units of a person's form. Reading it back gives the same piece, number for number. */
-export function typePiece(piece: Piece, units: Units): TypedPiece {
+export function typePiece(piece: FrameLoomPiece, units: Units): TypedPiece {
   const roles = Object.keys(piece.yarns);
   const idOf: IdOf = (role) => {
     const index = roles.findIndex((known) => known === role);

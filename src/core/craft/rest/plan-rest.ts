@@ -6,7 +6,7 @@ import { addUp, type PieceOnLoom } from '#core/craft/frame-loom/add-up.ts';
 import { putOnLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
 import type { StackedBand } from '#core/craft/frame-loom/stack-bands.ts';
 import { DEFAULT_ALLOWANCES } from '#core/craft/defaults.ts';
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { picksInHeight } from '#core/craft/picks.ts';
 import type { BandPlan, Hours, WarpPlan } from '#core/craft/plan-types.ts';
 import { ballsFor } from '#core/craft/purchase.ts';
@@ -138,7 +138,7 @@ function workOutAnew(piece: object, workings: PieceOnLoom, woven: WovenSoFar, fi
   if (findings.count > 0) return undefined;
   if (beat === undefined) return { workings, isMeasured: false };
   const again = Findings.in(findings.units);
-  const found = putOnLoom(Fields.of({ ...piece, beat, allowances: { ...Reflect.get(piece, 'allowances') as Piece['allowances'], marginWeft: marginOf(piece) } }, '', 'A piece', again));
+  const found = putOnLoom(Fields.of({ ...piece, beat, allowances: { ...Reflect.get(piece, 'allowances') as FrameLoomPiece['allowances'], marginWeft: marginOf(piece) } }, '', 'A piece', again));
   if (found !== undefined) return { workings: found, isMeasured: true };
   const read = again.outcome<never>(undefined);
   const reasons = read.ok ? '' : read.problems.map(({ message }) => message).join(' ');
@@ -148,7 +148,7 @@ function workOutAnew(piece: object, workings: PieceOnLoom, woven: WovenSoFar, fi
 
 /** What was measured needs less in reserve, unless the piece has a margin of its own. */
 function marginOf(piece: object): number {
-  const asked = (Reflect.get(piece, 'allowances') as Piece['allowances'])?.marginWeft;
+  const asked = (Reflect.get(piece, 'allowances') as FrameLoomPiece['allowances'])?.marginWeft;
   return asked ?? DEFAULT_ALLOWANCES.marginWeft.swatch;
 }
 

@@ -32,7 +32,7 @@ const LOFT_RATIO_RANGE = { min: 1, max: 3 } as const;
 /** Keys of a yarn that say how thick it is. */
 const GRIST_KEYS = ['tex', 'metresPer100g', 'count', 'class'] as const;
 
-function readColour(fields: Fields): string | undefined {
+export function readColour(fields: Fields): string | undefined {
   const colour = fields.optionalText('colour', { name: 'Colour', maxLength: 7 });
   if (colour === undefined || COLOUR.test(colour)) return colour;
   fields.reject('E_ENUM', 'colour', 'A colour is written as # and six figures or letters a to f, such as #6d93bc.');
@@ -49,7 +49,7 @@ function readFreeDiameter(fields: Fields): number | undefined {
   return fields.optionalNumber('freeDiameterMm', FREE_DIAMETER);
 }
 
-function readBall(fields: Fields): { readonly metres: number; readonly grams: number } | undefined {
+export function readBall(fields: Fields): { readonly metres: number; readonly grams: number } | undefined {
   const ball = fields.optionalGroup('ball', 'Ball');
   if (ball === undefined) return undefined;
   const size = { metres: ball.number('metres', BALL_METRES), grams: ball.number('grams', BALL_GRAMS) };

@@ -8,7 +8,7 @@ export const createSeries: Migration = {
       workroom_id INT UNSIGNED NOT NULL,
       slug ${sql.outside(64)} NOT NULL,
       title VARCHAR(120) NOT NULL,
-      craft ENUM('frame-loom','macrame') NOT NULL DEFAULT 'frame-loom',
+      craft ${sql.outside(40)} NOT NULL DEFAULT 'frame-loom',
       level ENUM('beginner','some-practice','sure-hand') NOT NULL DEFAULT 'beginner',
       summary VARCHAR(400) NOT NULL DEFAULT '',
       story TEXT NOT NULL DEFAULT '',

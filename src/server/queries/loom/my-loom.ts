@@ -1,7 +1,7 @@
 /** Everything on one person's loom: her seats with how far she is in each, and what she paid. Four statements. */
 import { QueryTypes } from 'sequelize';
 import type { MyPiece } from '#core/craft/fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { CraftName, Piece } from '#core/craft/crafts.ts';
 import type { PartInHand, Verdict } from '#core/following/progress.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { standingOf, type OpeningRule, type Standing } from '#core/timetable/opening.ts';
@@ -27,7 +27,7 @@ export interface SeatOnLoom {
   readonly publicId: string;
   readonly slug: string;
   readonly title: string;
-  readonly craft: 'frame-loom' | 'macrame';
+  readonly craft: CraftName;
   readonly teacherName: string;
   readonly answerDays: number;
   readonly startedAt: Date;

@@ -1,6 +1,6 @@
 /** The piece of a series, as its teacher describes it and as a student changed it for herself. */
 import type { MyPiece } from '#core/craft/fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import { MyPieceRow, PatternPiece } from '#server/models/index.ts';
 
 export interface PiecesOf {

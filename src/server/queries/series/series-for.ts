@@ -3,6 +3,7 @@
  * and every endpoint behind one, begins here, so that the rule of who may read what is asked in one way.
  */
 import { QueryTypes } from 'sequelize';
+import type { CraftName } from '#core/craft/crafts.ts';
 import { standingOf, type OpeningRule, type Standing } from '#core/timetable/opening.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import type { Actor } from '#server/context.ts';
@@ -33,7 +34,7 @@ export interface SeriesFor {
   readonly publicId: string;
   readonly slug: string;
   readonly title: string;
-  readonly craft: 'frame-loom' | 'macrame';
+  readonly craft: CraftName;
   readonly level: 'beginner' | 'some-practice' | 'sure-hand';
   readonly summary: string;
   readonly story: string;

@@ -36,11 +36,11 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
       ...factsOfText(lesson.draftReading, media, isUnknown),
     };
   });
-  // Pieces of other crafts cannot be described yet; their teachers say amounts in words.
-  const isReckoned = series.craft === 'frame-loom';
+  // Only a woven piece has a form to describe it in: without one, amounts are said in words.
+  const pieceFits = plan?.ok ?? (series.craft === 'frame-loom' ? null : true);
   const { title, summary, story, techniques, priceMinor } = series;
   return {
-    inHand: { title, summary, story, techniques, priceMinor, pieceFits: isReckoned ? (plan?.ok ?? null) : true, parts },
+    inHand: { title, summary, story, techniques, priceMinor, pieceFits, parts },
     drafts: lessons.map((lesson) => ({ lesson, text: lesson.draftReading })),
   };
 }

@@ -3,9 +3,9 @@
  * kept, since every visitor asks for the same ones.
  */
 import { QueryTypes } from 'sequelize';
-import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
-import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { ClothPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { clothOf } from '#core/craft/cloth-of.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { seriesFigures, type SeriesFigures } from '#core/series/figures.ts';
 import { titleHalves } from '#core/series/title.ts';
@@ -13,7 +13,7 @@ import { sequelize } from '#server/db/sequelize.ts';
 
 export interface PieceFacts {
   readonly figures: SeriesFigures;
-  readonly cloth: WovenPiece;
+  readonly cloth: ClothPiece;
 }
 
 export interface PieceAsked {
@@ -55,5 +55,5 @@ async function reckon(missing: readonly PieceAsked[]): Promise<void> {
 
 function factsOf(piece: Piece, name: string): PieceFacts | null {
   const plan = planPiece(piece);
-  return plan.ok ? { figures: seriesFigures(piece, plan.value), cloth: clothPieceOf(piece, plan.value, name) } : null;
+  return plan.ok ? { figures: seriesFigures(piece, plan.value), cloth: clothOf(piece, plan.value, name) } : null;
 }

@@ -2,8 +2,8 @@
 import { QueryTypes } from 'sequelize';
 import type { PartStretch } from '#core/craft/cloth/parts-strip.ts';
 import type { MyPiece } from '#core/craft/fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import { bandsByPart } from '#core/following/bands-by-part.ts';
+import type { Piece } from '#core/craft/crafts.ts';
+import { stretchesOf } from '#core/following/bands-by-part.ts';
 import { mergeLines, type MergedLine } from '#core/gathering/merge.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import type { Actor } from '#server/context.ts';
@@ -43,7 +43,7 @@ export async function seriesPage(actor: Actor | null, slug: string, now: Date): 
     looksAfter: worksIn(actor, series.workroom.id),
     ...around,
     toGather: mergeLines(lines),
-    stretches: around.pattern === null ? null : bandsByPart(around.pattern.bands, amountKeys),
+    stretches: around.pattern === null ? null : stretchesOf(around.pattern, amountKeys),
   };
 }
 

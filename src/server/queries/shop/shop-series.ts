@@ -1,5 +1,6 @@
 /** The series that are open, as they hang at the shop front: found by what a visitor wishes, newest first. */
 import { QueryTypes } from 'sequelize';
+import { CRAFT_NAMES, CRAFTS, type CraftName } from '#core/craft/crafts.ts';
 import { CURRENCIES, isCurrency, minorDigits } from '#core/money/currency.ts';
 import type { ShopWishes } from '#contracts/shop.ts';
 import { sequelize } from '#server/db/sequelize.ts';
@@ -9,7 +10,7 @@ export interface ShopSeries {
   readonly slug: string;
   readonly title: string;
   readonly summary: string;
-  readonly craft: 'frame-loom' | 'macrame';
+  readonly craft: CraftName;
   readonly level: 'beginner' | 'some-practice' | 'sure-hand';
   readonly priceMinor: number | null;
   readonly currency: string;
@@ -58,9 +59,12 @@ const ROWS = `
    WHERE s.state = 'published'`;
 const ORDER = ' ORDER BY s.published_at DESC, s.id DESC';
 
+/** Our own words, none of which holds a quote. */
+const CRAFT_SEARCH = CRAFT_NAMES.map((name) => `WHEN '${name}' THEN '${CRAFTS[name].words.search}'`).join(' ');
+
 /** What a word is looked for in, without regard to case and accents. */
 const HAYSTACK = `CONVERT(CONCAT_WS(' ', s.title, s.summary, s.story, s.techniques, u.name, w.name,
-  CASE s.craft WHEN 'macrame' THEN 'macramé knotting' ELSE 'weaving frame loom' END) USING utf8mb4) COLLATE utf8mb4_unicode_520_ci`;
+  CASE s.craft ${CRAFT_SEARCH} ELSE '' END) USING utf8mb4) COLLATE utf8mb4_unicode_520_ci`;
 
 /** Minor units in one unit of a row's own currency: all currencies of the house have two digits or none. */
 const WHOLE = CURRENCIES.filter((currency) => minorDigits(currency) === 0).map((currency) => `'${currency}'`).join(',');
@@ -102,8 +106,9 @@ async function byFigures(rows: readonly Row[], { hours, loom }: ShopWishes): Pro
     const figures = facts.get(row.id)?.figures;
     const isShort = hours === undefined || (figures?.hours.likely ?? row.minutes / 60) <= Number(hours);
     if (loom === undefined) return isShort;
-    if (loom === 'none') return isShort && row.craft !== 'frame-loom';
-    return isShort && figures !== undefined && figures.loomInsideMm <= Number(loom) * 10;
+    const insideMm = figures?.loomInsideMm;
+    if (loom === 'none') return isShort && (figures === undefined ? row.craft !== 'frame-loom' : insideMm === undefined);
+    return isShort && insideMm !== undefined && insideMm <= Number(loom) * 10;
   });
 }
 

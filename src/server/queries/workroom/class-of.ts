@@ -1,6 +1,6 @@
 /** The series of one or several workrooms with everybody who has a seat, and where each of them is. Always five statements. */
 import { QueryTypes } from 'sequelize';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import type { Verdict } from '#core/following/progress.ts';
 import { classPlace, type PartOfOne } from '#core/workroom/class-place.ts';
 import { sequelize } from '#server/db/sequelize.ts';

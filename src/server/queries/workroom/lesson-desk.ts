@@ -2,7 +2,7 @@
 import { QueryTypes } from 'sequelize';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';

@@ -1,12 +1,12 @@
 /** The pattern piece of a series, for its teacher, and which texts ask for amounts it does not give. */
-import type { Piece } from '#core/craft/piece.ts';
+import type { CraftName, Piece } from '#core/craft/crafts.ts';
 import type { Actor } from '#server/context.ts';
 import { PatternPiece, Series } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
 export interface PatternPieceFor {
-  readonly series: { readonly slug: string; readonly title: string; readonly craft: 'frame-loom' | 'macrame' };
+  readonly series: { readonly slug: string; readonly title: string; readonly craft: CraftName };
   /** Null while nothing is described. */
   readonly piece: Piece | null;
   readonly revision: number;

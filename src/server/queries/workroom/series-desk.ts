@@ -2,8 +2,8 @@
 import { QueryTypes } from 'sequelize';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { Piece } from '#core/craft/crafts.ts';
+import type { Plan } from '#core/craft/crafts.ts';
 import { whatIsMissing, type Missing } from '#core/series/missing.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';

@@ -45,7 +45,7 @@ export async function beginCheckout(ctx: Context, input: CheckoutInput): Promise
 /** A loom on which the piece does not fit is not held against her: she tells us of another one later. */
 async function pieceOnLoom({ id, title }: Series, { loom }: CheckoutInput): Promise<MyPiece | null> {
   const pattern = loom === null ? null : await PatternPiece.findByPk(id);
-  if (loom === null || pattern === null) return null;
+  if (loom === null || pattern?.data.craft !== 'frame-loom') return null;
   const trial = tryOnLoom(pattern.data, title, loom);
   return trial.ok && trial.fits ? trial.mine : null;
 }

@@ -20,6 +20,7 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
   authorize(seat !== null);
   const { pattern } = await piecesOf(series.id, null);
   if (pattern === null) throw new AppError('CONFLICT', { says: 'This series tells no piece yet, so there is nothing to reckon for your loom.' });
+  if (pattern.craft !== 'frame-loom') throw new AppError('CONFLICT', { says: 'This piece is not woven on a frame, so it asks nothing of your loom.' });
   const fields: Readonly<Record<string, unknown>> = input;
   const sent = mineOfFields((name) => textOf(fields, name), pattern);
   const typed = input.asPattern === undefined ? sent : asPattern(sent, pattern);

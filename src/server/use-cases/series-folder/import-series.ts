@@ -1,6 +1,6 @@
 import { parse as parseYaml } from 'yaml';
 import { planPiece } from '#core/craft/plan.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
 import { SeriesFile } from '#contracts/series-folder.ts';
 import type { Context } from '#server/context.ts';
@@ -84,6 +84,7 @@ async function check(read: ReadFile): Promise<Checked> {
   const fields: Record<string, string> = {};
   const file = await readSeriesFile(read);
   const piece = await readPiece(read, fields);
+  if (piece !== null && piece.craft !== file.craft) fields['piece.json'] = 'This piece is of another craft than series.yaml says.';
   const texts: { source: string; reading: ParseResult }[] = [];
   for (const [index, { file: name, opens }] of file.lessons.entries()) {
     const source = await read(name);

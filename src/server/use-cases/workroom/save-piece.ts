@@ -1,5 +1,5 @@
 import { planPiece } from '#core/craft/plan.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { Piece } from '#core/craft/crafts.ts';
 import type { Problem } from '#core/outcome.ts';
 import type { Context } from '#server/context.ts';
 import { PatternPiece } from '#server/models/index.ts';
@@ -18,6 +18,9 @@ export async function savePiece(ctx: Context, input: { series: string; revision:
   if (!plan.ok) return { ok: false, problems: plan.problems };
   // Reckoned without a problem, so it has the shape of a piece.
   const data = input.piece as Piece;
+  if (data.craft !== known.craft) {
+    return { ok: false, problems: [{ code: 'E_ENUM', path: '/craft', message: 'This piece is of another craft than the series.' }] };
+  }
   return withSeriesLocked(known, async (series) => {
     const kept = await PatternPiece.findByPk(series.id);
     requireRevision(kept?.revision ?? 0, input.revision);

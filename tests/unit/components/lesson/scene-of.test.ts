@@ -4,13 +4,13 @@ import { clockTime } from '#core/captions/clock-time.ts';
 import { stepInHand } from '#components/lesson/scene.ts';
 import { sceneOf, type SceneSources } from '#components/lesson/scene-of.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { factsOf } from '#core/lesson-text/lesson-facts.ts';
 import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
 
 const folder = new URL('../../../../content/series/low-tide/', import.meta.url);
-const piece = JSON.parse(readFileSync(new URL('piece.json', folder), 'utf8')) as Piece;
+const piece = JSON.parse(readFileSync(new URL('piece.json', folder), 'utf8')) as FrameLoomPiece;
 const planned = planPiece(piece);
 if (!planned.ok) throw new Error('Low Tide can be woven.');
 const plan = planned.value;

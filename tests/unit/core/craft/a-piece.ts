@@ -1,6 +1,6 @@
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Problem } from '#core/outcome.ts';
 
 /** A small hanging that can be woven as it is: 62 ends at 5 mm, one plain band that fills it. */
@@ -12,16 +12,17 @@ export const PLAIN_PIECE = {
   beat: { picksPerWeftDiameter: 0.7 },
   yarns: { ground: { metresPer100g: 180 } },
   bands: [{ technique: 'tabby', name: 'sky', yarn: 'ground', fill: true }],
-} as const satisfies Piece;
+} as const satisfies FrameLoomPiece;
 
 /** The plain piece with other parts put in their place. */
-export const pieceWith = (parts: Partial<Piece>): Piece => ({ ...PLAIN_PIECE, ...parts });
+export const pieceWith = (parts: Partial<FrameLoomPiece>): FrameLoomPiece => ({ ...PLAIN_PIECE, ...parts });
 
 /** The plain piece with more bands under its filling one. */
-export const pieceOf = (...bands: Band[]): Piece => pieceWith({ bands: [...bands, ...PLAIN_PIECE.bands] });
+export const pieceOf = (...bands: Band[]): FrameLoomPiece => pieceWith({ bands: [...bands, ...PLAIN_PIECE.bands] });
 
-export function planOf(piece: unknown): Plan {
-  const planned = planPiece(piece);
+/** Of a frame-loom piece, read as one from whatever was handed in. */
+export function planOf(piece: unknown): FrameLoomPlan {
+  const planned = planPiece(piece as FrameLoomPiece);
   if (!planned.ok) throw new Error(JSON.stringify(planned.problems, null, 1));
   return planned.value;
 }

@@ -1,11 +1,12 @@
 import { describe, expect, test } from 'vitest';
-import { AMOUNT_KEYS, amountKeysOf, amountOf, type Amount } from '#core/craft/amounts.ts';
+import { amountKeysOf, amountOf, type Amount } from '#core/craft/amounts.ts';
+import { AMOUNTS } from '#core/craft/frame-loom/amounts.ts';
 import { leastTrust } from '#core/craft/trust.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { pieceWith, planOf, PLAIN_PIECE } from './a-piece.ts';
 
-const PIECE: Piece = pieceWith({
+const PIECE: FrameLoomPiece = pieceWith({
   warp: { yarn: { tex: 400, ball: { metres: 250, grams: 100 } }, parity: 'even' },
   dowel: { diameterMm: 12 },
   yarns: {
@@ -21,7 +22,7 @@ const PIECE: Piece = pieceWith({
 });
 const PLAN = planOf(PIECE);
 
-const amount = (key: string, piece: Piece = PIECE): Amount => {
+const amount = (key: string, piece: FrameLoomPiece = PIECE): Amount => {
   const outcome = amountOf(key, piece, planOf(piece));
   if (!outcome.ok) throw new Error(outcome.problems[0]?.message);
   return outcome.value;
@@ -86,7 +87,7 @@ test('every amount says how it was got: formula, what went in, source and trust'
 
 test('every kind of amount is told by this piece, written out by role and band', () => {
   const keys = amountKeysOf(PIECE, PLAN);
-  for (const key of AMOUNT_KEYS) {
+  for (const key of AMOUNTS.flatMap((group) => group.keys)) {
     const pattern = new RegExp(`^${key.replaceAll('.', '\\.').replace('<role>', '[a-z]+').replace('<name>', '[a-z-]+')}$`, 'u');
     expect(keys.some((written) => pattern.test(written)), key).toBe(true);
   }

@@ -2,12 +2,12 @@ import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
 import { fitPiece, roomOnLoom, type MyPiece } from '#core/craft/fit.ts';
 import { nthNailFor } from '#core/craft/fitting/change-piece.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { PLAIN_PIECE, pieceOf, pieceWith } from './a-piece.ts';
 
-const PATTERN: Piece = pieceWith({ dowel: { diameterMm: 12, lengthMm: 380 }, yarns: { ground: { metresPer100g: 180, colour: '#6d93bc', label: 'Fenwool' } } });
+const PATTERN: FrameLoomPiece = pieceWith({ dowel: { diameterMm: 12, lengthMm: 380 }, yarns: { ground: { metresPer100g: 180, colour: '#6d93bc', label: 'Fenwool' } } });
 
-const fitted = (mine: MyPiece, pattern: Piece = PATTERN) => {
+const fitted = (mine: MyPiece, pattern: FrameLoomPiece = PATTERN) => {
   const outcome = fitPiece(pattern, mine);
   if (!outcome.ok) throw new Error(JSON.stringify(outcome.problems));
   const { changes, ...made } = outcome.value;
@@ -167,7 +167,7 @@ describe('what a student mistypes', () => {
 });
 
 test('the demo series fits its own loom, and a narrower one with every second nail', () => {
-  const piece = JSON.parse(readFileSync(new URL('../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8')) as Piece;
+  const piece = JSON.parse(readFileSync(new URL('../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8')) as FrameLoomPiece;
   expect(fitPiece(piece, {})).toMatchObject({ ok: true, warnings: [] });
   expect(fitPiece(piece, { widthMm: 300, loom: { nailPitchMm: 5, insideWidthMm: 400 } })).toMatchObject({ ok: true, value: { piece: { loom: { everyNthNail: 2 } } } });
 });

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { pieceOf, pieceWith, planOf, PLAIN_PIECE, problemsOf, refusals } from './a-piece.ts';
 
 const firstBand = (...bands: Band[]) => planOf(pieceOf(...bands)).bands[0];
@@ -86,7 +86,7 @@ describe('techniques in a piece', () => {
 });
 
 describe('what a technique refuses', () => {
-  const few = (band: Band): Partial<Piece> => ({ bands: [band, ...PLAIN_PIECE.bands] });
+  const few = (band: Band): Partial<FrameLoomPiece> => ({ bands: [band, ...PLAIN_PIECE.bands] });
 
   test.each<[Band, string]>([
     [{ ...SOUMAK, over: 70, back: 2 }, 'E_FIT /bands/0/over'],

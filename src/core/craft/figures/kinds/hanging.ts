@@ -16,7 +16,7 @@ export const HANGING: Figure = {
     const cord = plan.cut.cordMm === undefined ? 'One cord' : `One cord of ${lengthWords(plan.cut.cordMm, units, 'cut')}`;
     return `${cord} is tied near both ends of the dowel, and the dowel hangs level. The piece weighs about ${massWords(plan.massG, units)}; the fixing should hold at least ${massWords(plan.cut.fixingHoldsG, units)}.`;
   },
-  steps: ({ plan, units }) => [{ weight: 1, words: `Tie the cord near both ends of the dowel and hang it level, from a fixing that holds ${massWords(plan.massG * SAFETY, units)} or more.` }],
+  steps: ({ plan, units }) => [{ weight: 1, words: `Tie the cord near both ends of the dowel and hang it level, from a fixing that holds ${massWords(plan.cut.fixingHoldsG, units)} or more.` }],
   draw: (scene, input, progress) => {
     const { plan, units } = input;
     const svg = drawCloth(clothPieceOf(input.piece, plan, ''), { id: `${scene.id}-hung`, as: 'hanging', width: WIDTH, decorative: true });

@@ -1,7 +1,6 @@
 import { describe, expect, it } from 'vitest';
 import { closeUpOf } from '#core/craft/cloth/close-up.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
-import { plainCords } from '#core/craft/cloth/plain-cords.ts';
 import { wovenPiece } from './pieces.ts';
 
 describe('a piece seen from very near', () => {
@@ -15,11 +14,5 @@ describe('a piece seen from very near', () => {
     const svg = drawCloth(near, { id: 'a', as: 'swatch', range: 'near', width: 900, height: 600, begin: 'foot' });
     expect(svg).toContain('<pattern id="a-ply');
     expect(svg.length).toBeLessThan(60 * 1024);
-  });
-});
-
-describe('plain cords', () => {
-  it('carry the title of the series that has no description yet', () => {
-    expect(drawCloth(plainCords('Three Knotted Cords'), { id: 'a', as: 'hanging', width: 46 })).toContain('aria-label="Three Knotted Cords, plant hanger');
   });
 });

@@ -4,12 +4,12 @@ import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import { wovenHeightMm, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { NEUTRAL } from '#core/craft/cloth/colour.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 
-const LOW_TIDE: Piece = JSON.parse(readFileSync(new URL('../../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8'));
+const LOW_TIDE: FrameLoomPiece = JSON.parse(readFileSync(new URL('../../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8'));
 
-function clothOf(piece: Piece): WovenPiece {
+function clothOf(piece: FrameLoomPiece): WovenPiece {
   const plan = planPiece(piece);
   if (!plan.ok) throw new Error(plan.problems.map((problem) => problem.message).join(' '));
   return clothPieceOf(piece, plan.value, 'Low Tide');

@@ -1,5 +1,5 @@
 // Pieces to draw in tests: small, invented, with every technique.
-import type { ClothBand, CordPiece, RyaBand, SoumakBand, TabbyBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import type { ClothBand, HungPiece, RyaBand, SoumakBand, TabbyBand, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 
 export const SLACK = '#93a8a6';
 export const ESTUARY = '#2f5366';
@@ -45,11 +45,17 @@ export function wovenPiece(overrides: Partial<WovenPiece> = {}): WovenPiece {
   };
 }
 
-export const CORDS: CordPiece = {
-  kind: 'cords', title: 'Three Knotted Cords', thing: 'plant hanger', widthMm: 150, lengthMm: 760, seed: 2,
-  cords: [
-    { colour: '#ddd3bb', widthMm: 46, knotted: 0.86 },
-    { colour: '#ddd3bb', widthMm: 46, knotted: 0.7, run: 6 },
-    { colour: '#ddd3bb', widthMm: 46, knotted: 0.9 },
+/** Two cords on a rod, one knot of the second over the first. */
+export const CORDS: HungPiece = {
+  kind: 'hung', title: 'Three Knotted Cords', thing: 'plant hanger', widthMm: 150, heightMm: 760,
+  rod: { kind: 'rod', diameterMm: 16 },
+  words: { cm: 'two cords, 76\u00a0cm long.', in: 'two cords, 30\u00a0in long.' },
+  motifs: [[{ colour: '#ddd3bb', widthMm: 4, way: [-8, 0, 0, 4, 4, 4, 8, 6] }]],
+  laid: [
+    { colour: '#ddd3bb', widthMm: 4, way: [60, -10, 60, 100, 60, 400, 60, 760] },
+    'rod',
+    { motif: 0, xMm: 60, yMm: 100 },
+    { motif: 0, xMm: 60, yMm: 120 },
+    { colour: 'red;}', widthMm: 4, way: [90, 0, 90, 100, 90, 400, 90, 760] },
   ],
 };

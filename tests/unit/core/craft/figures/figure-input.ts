@@ -1,9 +1,9 @@
 // A small piece and its numbers, as a figure needs them. The numbers are plausible, not reckoned.
-import type { Piece } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { FigureInput } from '#core/craft/figures/figure.ts';
 
-export const PIECE: Piece = {
+export const PIECE: FrameLoomPiece = {
   craft: 'frame-loom',
   size: { widthMm: 300, heightMm: 400 },
   loom: { nailPitchMm: 10, warping: 'zigzag', insideHeightMm: 520, insideWidthMm: 400 },
@@ -23,11 +23,11 @@ export const PIECE: Piece = {
   ],
 };
 
-const band = (index: number, technique: Plan['bands'][number]['technique'], heightMm: number, picks: number): Plan['bands'][number] => ({
+const band = (index: number, technique: FrameLoomPlan['bands'][number]['technique'], heightMm: number, picks: number): FrameLoomPlan['bands'][number] => ({
   index, technique, heightMm, picks, yarnMm: {},
 });
 
-export const PLAN: Plan = {
+export const PLAN: FrameLoomPlan = {
   ends: { count: 62, working: 62, raw: 61.2, spacingMm: 5, nailsTop: 32, nailsBottom: 31, woundWidthMm: 305, loomWidthMm: 306 },
   loom: { insideWidthNeededMm: 350, heightOnLoomMm: 408, heightNeededMm: 508, topMm: 40, firstGapsMm: { narrow: 1, wide: 9 }, spacingRows: { fewest: 3, most: 4 }, bottomMm: 60 },
   weft: { diameterSumMm: 1.8, pickSpacingMm: 1.45, tightness: 0.36, crimp: 0.066, stepMm: 5.33, turnMm: 3.2, pickMm: 328.5, rawPicks: 83 },

@@ -3,30 +3,30 @@ import { describe, expect, test } from 'vitest';
 import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
 import { tellRoom } from '#core/craft/fitting/tell-room.ts';
 import { isWorthChoosing, wayIdOf, waysToFit, type WayId, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { cases } from '../../../../support/random-cases.ts';
 import { PLAIN_PIECE, pieceWith, planOf } from '../a-piece.ts';
 
 const plain = (words: string): string => words.replaceAll('\u00a0', ' ');
-const wayOf = (pattern: Piece, mine: MyPiece, id: WayId, chosen: readonly string[] = []): WayToFit => {
+const wayOf = (pattern: FrameLoomPiece, mine: MyPiece, id: WayId, chosen: readonly string[] = []): WayToFit => {
   const found = waysToFit(pattern, mine, 'cm', chosen).find((way) => way.id === id);
   if (found === undefined) throw new Error(`no way ${id}`);
   return found;
 };
-const fittedBy = (pattern: Piece, mine: MyPiece, id: WayId, chosen?: readonly string[]) => {
+const fittedBy = (pattern: FrameLoomPiece, mine: MyPiece, id: WayId, chosen?: readonly string[]) => {
   const { outcome, way } = wayOf(pattern, mine, id, chosen);
   if (!outcome.ok) throw new Error(JSON.stringify(outcome.problems));
   return { way, ...outcome.value, changes: outcome.value.changes.map(plain) };
 };
-const idsOf = (pattern: Piece, mine: MyPiece): WayId[] => waysToFit(pattern, mine).map(({ id }) => id);
-const whyNot = (pattern: Piece, mine: MyPiece, id: WayId): string => {
+const idsOf = (pattern: FrameLoomPiece, mine: MyPiece): WayId[] => waysToFit(pattern, mine).map(({ id }) => id);
+const whyNot = (pattern: FrameLoomPiece, mine: MyPiece, id: WayId): string => {
   const { outcome } = wayOf(pattern, mine, id);
   return outcome.ok ? '' : outcome.problems.map(({ message }) => message).join(' ');
 };
 
 const HEM: Band = { technique: 'hem-stitch', yarn: 'ground', bundleEnds: 2, reachPicks: 2 };
 /** Foot 60, fringe 10, hill 90, and a sky that fills the other 240 of 400. */
-const HILLS: Piece = pieceWith({
+const HILLS: FrameLoomPiece = pieceWith({
   bands: [
     HEM,
     { technique: 'tabby', name: 'foot', yarn: 'ground', heightMm: 60 },

@@ -1,6 +1,6 @@
 /** Pieces of every make, whether or not they could be woven: a form must hold them all. */
 import fc from 'fast-check';
-import type { Allowances, Band, Beat, Finish, Piece, Shape, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Beat, Finish, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
 import { present } from '#core/craft/reading/present.ts';
 
 /** Lengths as people write them, and as sums and inches leave them behind. */
@@ -104,9 +104,9 @@ const more = fc.record({
 });
 
 /** Optional parts come and go; empty groups and lists, which say nothing, do not occur. */
-export const arbitraryPiece: fc.Arbitrary<Piece> = fc.uniqueArray(roleName, { minLength: 1, maxLength: 4 }).chain((roles) =>
+export const arbitraryPiece: fc.Arbitrary<FrameLoomPiece> = fc.uniqueArray(roleName, { minLength: 1, maxLength: 4 }).chain((roles) =>
   fc.tuple(once, more, fc.tuple(...roles.map(() => yarn)), fc.array(bandOf(fc.constantFrom(...roles)), { minLength: 1, maxLength: 6 }))
-    .map(([needed, optional, yarns, bands]): Piece => ({
+    .map(([needed, optional, yarns, bands]): FrameLoomPiece => ({
       craft: 'frame-loom', ...needed, ...present(optional), bands,
       yarns: Object.fromEntries(roles.flatMap((role, index) => { const own = yarns[index]; return own === undefined ? [] : [[role, own]]; })),
     })));

@@ -1,7 +1,7 @@
 import { readFileSync } from 'node:fs';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
 import { shiftPoint } from '#core/craft/piece-form/field-text.ts';
@@ -12,10 +12,10 @@ import { cases } from '../../../../support/random-cases.ts';
 import { arbitraryPiece } from './arbitrary-piece.ts';
 
 const SHIPPED = ['../../../../../content/series/low-tide/piece.json', '../../../../reference/worked-piece.json'];
-const shipped = (path: string): Piece => JSON.parse(readFileSync(new URL(path, import.meta.url), 'utf8')) as Piece;
+const shipped = (path: string): FrameLoomPiece => JSON.parse(readFileSync(new URL(path, import.meta.url), 'utf8')) as FrameLoomPiece;
 
 /** What a browser sends for this form, read as the server reads it. */
-function sent(piece: Piece, units: 'cm' | 'in') {
+function sent(piece: FrameLoomPiece, units: 'cm' | 'in') {
   const fields = fieldsOfTyped(typePiece(piece, units));
   return typedOfFields((name) => fields.get(name));
 }

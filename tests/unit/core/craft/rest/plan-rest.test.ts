@@ -1,6 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import type { Band, Piece } from '#core/craft/piece.ts';
+import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { planRest, type RestPlan, type WovenSoFar } from '#core/craft/rest/plan-rest.ts';
 import { widen } from '#core/craft/fitting/widen.ts';
 import { refuseChanges } from '#core/craft/rest/fixed-on-loom.ts';
@@ -9,7 +9,7 @@ import { PLAIN_PIECE, pieceWith, planOf } from '../a-piece.ts';
 
 const pattern = await lowTide();
 const plain = (words: string): string => words.replaceAll('\u00a0', ' ');
-const restOf = (piece: Piece, woven: WovenSoFar): RestPlan => {
+const restOf = (piece: FrameLoomPiece, woven: WovenSoFar): RestPlan => {
   const rest = planRest(piece, woven);
   if (!rest.ok) throw new Error(JSON.stringify(rest.problems));
   return rest.value;
@@ -18,7 +18,7 @@ const problemsOf = (piece: unknown, woven: unknown): string[] => {
   const rest = planRest(piece, woven);
   return rest.ok ? [] : rest.problems.map(({ code, path, message }) => `${code} ${path} ${plain(message)}`);
 };
-const warningsOf = (piece: Piece, woven: WovenSoFar): string[] => {
+const warningsOf = (piece: FrameLoomPiece, woven: WovenSoFar): string[] => {
   const rest = planRest(piece, woven);
   return rest.ok ? rest.warnings.map(({ code, path, message }) => `${code} ${path} ${plain(message)}`) : [];
 };
@@ -127,9 +127,9 @@ describe('what makes no sense is refused', () => {
 });
 
 describe('what is on the loom stays', () => {
-  const made = (piece: Piece) => ({ piece, plan: planOf(piece) });
+  const made = (piece: FrameLoomPiece) => ({ piece, plan: planOf(piece) });
   const woven: WovenSoFar = { bandsDone: 2, rows: 1 };
-  const refusals = (after: Piece, so = woven): string[] => refuseChanges(made(pattern), made(after), so).map(({ code, path }) => `${code} ${path}`);
+  const refusals = (after: FrameLoomPiece, so = woven): string[] => refuseChanges(made(pattern), made(after), so).map(({ code, path }) => `${code} ${path}`);
 
   test('width, ends and spacing, and the bands that are woven', () => {
     expect(refusals(widen(pattern, 300))).toContain('E_FIT /size/widthMm');
