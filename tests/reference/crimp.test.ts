@@ -142,10 +142,9 @@ describe('picks', () => {
     expectClose(yards, 449.3287, 1e-6);
     expect(495 / yards).toBeGreaterThan(1);
     expect(495 / yards).toBeLessThan(1.2);
-    // The square metre: of the same order as Collingwood's half pound in a square foot.
-    const grams = (yards * 0.9144 * weft.tex) / 1000;
-    const squareMetres = 34 * 0.0254 * 21 * 0.0254;
-    expectClose(grams / squareMetres, 1709.57, 0.05);
+    // The square metre, selvedges apart (row 36): of the same order as Collingwood's half pound in a square foot.
+    const gramsPerMetre = weft.tex / 1000;
+    expectClose((gramsPerMetre * (1 + geometry.crimp)) / (geometry.pickSpacingMm / 1000), 1709.57, 1e-5);
     expectClose((0.5 * 453.59237) / 0.3048 ** 2, 2441.2138, 1e-7);
   });
 });

@@ -241,6 +241,30 @@ describe('whole pieces', () => {
     );
   }, 60_000);
 
+  test('on a scale k everything long is k times as long, counts and shares stay, and yarn is k² as heavy for its length', () => {
+    fc.assert(
+      fc.property(pieces, between(1.05, 2), (piece, k) => {
+        const roomy = (scale: number) => ({
+          ...piece,
+          size: { widthMm: piece.size.widthMm * scale, heightMm: piece.size.heightMm * scale },
+          loom: { ...piece.loom, nailPitchMm: piece.loom.nailPitchMm * scale, nailDiameterMm: 1.6 * scale, insideHeightMm: piece.loom.insideHeightMm * scale },
+          warp: { ...piece.warp, yarn: { tex: piece.warp.yarn.tex * scale ** 2 }, tieMm: 150 * scale },
+          allowances: { ...piece.allowances, topMm: 70 * scale, bottomMm: 90 * scale, tailMm: 50 * scale, loadMm: 8000 * scale },
+          yarns: Object.fromEntries(Object.entries(piece.yarns).map(([role, { tex }]) => [role, { tex: tex * scale ** 2 }])),
+          bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 60 * scale }, { technique: 'tabby', yarn: 'ground', fill: true }],
+        });
+        const [one, scaled] = [planPiece(roomy(1) as FrameLoomPiece), planPiece(roomy(k) as FrameLoomPiece)];
+        fc.pre(one.ok && scaled.ok);
+        const [a, b] = [one.value, scaled.value];
+        const yarns = Object.keys(a.yarns).every((role) => near(b.yarns[role]?.netMm ?? 0, k * (a.yarns[role]?.netMm ?? 0), 1e-9));
+        return yarns && near(b.warp.netMm, k * a.warp.netMm, 1e-9) && near(b.massG, k ** 3 * a.massG, 1e-9) && near(b.weft.pickMm, k * a.weft.pickMm, 1e-9)
+          && near(b.weft.crimp, a.weft.crimp, 1e-7) && b.ends.count === a.ends.count && near(b.loom.heightNeededMm, k * a.loom.heightNeededMm, 1e-9)
+          && b.bands.every(({ picks }, index) => picks === a.bands[index]?.picks);
+      }),
+      { ...RUNS, numRuns: 1000 },
+    );
+  }, 60_000);
+
   test('every number is finite and none is below zero', () => {
     fc.assert(
       fc.property(pieces, (piece) => {
