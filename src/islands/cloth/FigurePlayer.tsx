@@ -1,5 +1,5 @@
 /**
- * The keys of a technique that moves: played slowly, step by step, or led by hand. The drawing begins as the finished one,
+ * The keys of a technique that moves: played slowly, movement by movement (a lesson has steps of its own), or led by hand. The drawing begins as the finished one,
  * exactly as the server drew it, and never moves by itself. Who wants less motion is shown each step at once.
  */
 import { useEffect, useId, useMemo, useState, type KeyboardEvent } from 'react';
@@ -52,10 +52,10 @@ export function FigurePlayer({ id, kind, input, drawing }: FigurePlayerProps) {
     act();
   };
   return (
-    <div className="technique-keys" role="group" aria-label="Step by step" onKeyDown={onKey}>
-      <Button small onClick={back} glyph="back">Step back</Button>
+    <div className="technique-keys" role="group" aria-label="Movement by movement" onKeyDown={onKey}>
+      {steps.length > 1 && <Button small onClick={back} glyph="back">Back</Button>}
       {!still && <Button small onClick={whole} glyph={playing ? 'pause' : 'play'}>{playing ? 'Pause' : 'Play it slowly'}</Button>}
-      <Button small onClick={next}>{progress >= 1 ? 'First step' : 'Next step'}</Button>
+      {steps.length > 1 && <Button small onClick={next}>{progress >= 1 ? 'First movement' : 'Next movement'}</Button>}
       <label htmlFor={place} className="technique-place">
         How far
         <input id={place} type="range" min={0} max={100} value={Math.round(progress * 100)} onChange={(event) => ask(() => goTo(Number(event.target.value) / 100))()} />
@@ -73,7 +73,7 @@ function afterStep(steps: readonly StepAt[], progress: number): number {
 
 function stepWords(steps: readonly StepAt[], progress: number): string {
   const at = stepAt(steps, progress);
-  return `${steps.length === 1 ? '' : `Step ${String(at + 1)} of ${String(steps.length)}: `}${steps[at]?.words ?? ''}`;
+  return `${steps.length === 1 ? '' : `Movement ${String(at + 1)} of ${String(steps.length)}: `}${steps[at]?.words ?? ''}`;
 }
 
 /** Whether the person has asked for less motion. */

@@ -43,7 +43,7 @@ describe('a technique that moves', () => {
   it('gives each figure of the page keys of its own, and none to what it does not know', () => {
     page('tabby', 'tabby', 'no-such-thing');
     render(<LiveFigures input={INPUT} />);
-    expect(screen.getAllByRole('group', { name: 'Step by step' })).toHaveLength(2);
+    expect(screen.getAllByRole('group', { name: 'Movement by movement' })).toHaveLength(2);
   });
 
   it('is led by hand to any place', () => {
@@ -67,15 +67,15 @@ describe('a technique that moves', () => {
     page('tabby');
     render(<LiveFigures input={INPUT} />);
     const steps = stepsOf('tabby', INPUT);
-    press('First step');
+    press('First movement');
     expect(drawing()).toBe(at(steps[0]?.until ?? 0));
-    expect(screen.getByText(`Step 1 of 5: ${steps[0]?.words ?? ''}`)).toBeTruthy();
-    press('Next step');
-    press('Next step');
-    expect(screen.getByText(/^Step 3 of 5/)).toBeTruthy();
-    press('Step back');
+    expect(screen.getByText(`Movement 1 of 5: ${steps[0]?.words ?? ''}`)).toBeTruthy();
+    press('Next movement');
+    press('Next movement');
+    expect(screen.getByText(/^Movement 3 of 5/)).toBeTruthy();
+    press('Back');
     expect(drawing()).toBe(at(steps[1]?.until ?? 0));
-    expect(screen.getByText(/^Step 2 of 5/)).toBeTruthy();
+    expect(screen.getByText(/^Movement 2 of 5/)).toBeTruthy();
   });
 
   it('takes arrows while one of its keys has the focus, and keeps them from the page', () => {
@@ -84,13 +84,20 @@ describe('a technique that moves', () => {
     render(<LiveFigures input={INPUT} />);
     const heard = vi.fn();
     document.addEventListener('keydown', heard);
-    fireEvent.keyDown(screen.getByRole('button', { name: 'First step' }), { key: 'ArrowRight' });
-    expect(screen.getByText(/^Step 1 of 5/)).toBeTruthy();
-    fireEvent.keyDown(screen.getByRole('button', { name: 'Next step' }), { key: 'ArrowRight' });
-    fireEvent.keyDown(screen.getByRole('button', { name: 'Next step' }), { key: 'ArrowLeft' });
-    expect(screen.getByText(/^Step 1 of 5/)).toBeTruthy();
+    fireEvent.keyDown(screen.getByRole('button', { name: 'First movement' }), { key: 'ArrowRight' });
+    expect(screen.getByText(/^Movement 1 of 5/)).toBeTruthy();
+    fireEvent.keyDown(screen.getByRole('button', { name: 'Next movement' }), { key: 'ArrowRight' });
+    fireEvent.keyDown(screen.getByRole('button', { name: 'Next movement' }), { key: 'ArrowLeft' });
+    expect(screen.getByText(/^Movement 1 of 5/)).toBeTruthy();
     expect(heard).not.toHaveBeenCalled();
     document.removeEventListener('keydown', heard);
+  });
+
+  it('has no keys from movement to movement where there is only one', () => {
+    page('slit');
+    render(<LiveFigures input={INPUT} />);
+    expect(screen.queryByRole('button', { name: 'First movement' })).toBeNull();
+    expect(screen.getByRole('button', { name: 'Play it slowly' })).toBeTruthy();
   });
 
   it('shows each step at once, and does not play, for whoever wants less motion', () => {

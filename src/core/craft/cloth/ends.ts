@@ -17,17 +17,22 @@ export function drawEnds(top: number, bottom: number, weave: Weave, x0 = 0, x1 =
 export function drawEverySecondEnd(top: number, bottom: number, first: 0 | 1, weave: Weave): string {
   const height = bottom - top;
   const d = `M0 ${num(top + height / 2)}H${num(weave.width)}`;
-  return plainEnds(d, height, weave, (width, off) => dashes(width, 2 * weave.end - width, (first + 0.5) * weave.end - width / 2 + off));
+  return endsAt(d, height, weave, (width, off) => dashes(width, 2 * weave.end - width, (first + 0.5) * weave.end - width / 2 + off));
 }
 
 /** The ends under lying lines of a given thickness. Every line begins at a multiple of two ends. */
 export function strokeEnds(d: string, height: number, weave: Weave): string {
-  if (weave.endsTogether === 2 && weave.end >= DOUBLED_FROM) return drawDoubled(d, height, weave);
-  return plainEnds(d, height, weave, (width, off) => eachEnd(weave, width, off));
+  return endsAt(d, height, weave, (width, off) => eachEnd(weave, width, off));
 }
 
-/** @param at the dashes of threads so wide, so far beside the middle of their ends */
-function plainEnds(d: string, height: number, weave: Weave, at: (width: number, off: number) => string): string {
+/** The dashes of threads so wide, so far beside the middle of their ends. */
+type DashesAt = (width: number, off: number) => string;
+
+function endsAt(d: string, height: number, weave: Weave, at: DashesAt): string {
+  return weave.endsTogether === 2 && weave.end >= DOUBLED_FROM ? doubledEnds(d, height, weave, at) : plainEnds(d, height, weave, at);
+}
+
+function plainEnds(d: string, height: number, weave: Weave, at: DashesAt): string {
   const { warpColour, warpWidth: width, paths } = weave;
   let drawn = paths.stroke(d, shade(warpColour, 0.45), height, at(width, 0));
   drawn += paths.stroke(d, warpColour, height, at(width * 0.68, -width * 0.08));
@@ -35,14 +40,14 @@ function plainEnds(d: string, height: number, weave: Weave, at: (width: number, 
   return drawn;
 }
 
-function drawDoubled(d: string, height: number, weave: Weave): string {
+function doubledEnds(d: string, height: number, weave: Weave, at: DashesAt): string {
   const { warpColour, warpWidth: width, paths } = weave;
   return [-1, 1]
     .map((side) => {
       const off = side * width * 0.31;
       return (
-        paths.stroke(d, shade(warpColour, 0.45), height, eachEnd(weave, width * 0.56, off)) +
-        paths.stroke(d, light(warpColour, 0.1), height, eachEnd(weave, width * 0.34, off - width * 0.06))
+        paths.stroke(d, shade(warpColour, 0.45), height, at(width * 0.56, off)) +
+        paths.stroke(d, light(warpColour, 0.1), height, at(width * 0.34, off - width * 0.06))
       );
     })
     .join('');

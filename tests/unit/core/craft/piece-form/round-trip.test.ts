@@ -1,10 +1,11 @@
 import { readFileSync } from 'node:fs';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import { shapeFields } from '#core/craft/piece-form/asked-of-band.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
-import { shiftPoint } from '#core/craft/piece-form/field-text.ts';
+import { readText, shiftPoint } from '#core/craft/piece-form/field-text.ts';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { typePiece } from '#core/craft/piece-form/type-piece.ts';
@@ -65,4 +66,18 @@ describe('a piece in a form', () => {
 
 test.each([['0.02', 2, '2'], ['0.025', 2, '2.5'], ['1', 2, '100'], ['0', 2, '0'], ['2.5', -2, '0.025'], ['12', -2, '0.12'], ['100', -2, '1'], ['5', -2, '0.05']])('the point of %s moved by %i gives %s', (text, places, shifted) => {
   expect(shiftPoint(text, places)).toBe(shifted);
+});
+
+describe('corners of a shape in one field', () => {
+  const corners = shapeFields('points').find(({ kind }) => kind === 'points');
+  if (corners === undefined) throw new Error('no field for corners');
+
+  test('are read in the form’s unit, or in the one that stands behind a length', () => {
+    expect(readText('0 : 0; 12,5 : -1; 60 mm : 9;', corners, 'cm')).toEqual({ ok: true, value: [{ xMm: 0, yMm: 0 }, { xMm: 125, yMm: -10 }, { xMm: 60, yMm: 90 }] });
+    expect(readText('4 7/8 : 2', corners, 'in')).toEqual({ ok: true, value: [{ xMm: 4.875 * 25.4, yMm: 50.8 }] });
+  });
+
+  test.each(['12', '12 : ', '1 : 2 : 3', 'here : there'])('“%s” is refused with what works', (text) => {
+    expect(readText(text, corners, 'cm')).toMatchObject({ ok: false, says: expect.stringMatching(/12/u) as string });
+  });
 });
