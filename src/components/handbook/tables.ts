@@ -1,7 +1,7 @@
 /** The handbook's tables of numbers, each reckoned by the functions that reckon every plan. */
 import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { weftFacedCrimp } from '#core/craft/crimp.ts';
-import { ASHENHURST_K, LOFT_RATIO } from '#core/craft/defaults.ts';
+import { ASHENHURST_K, CARD_THICKNESS_MM, LOFT_RATIO } from '#core/craft/defaults.ts';
 import { endsPerMm, workingSpacing } from '#core/craft/nails.ts';
 import type { CountSystem } from '#core/craft/piece.ts';
 import { roundUpTo } from '#core/craft/rounding.ts';
@@ -194,7 +194,6 @@ function soumakYarn(): FigureTableData {
   };
 }
 
-const CARD_THICKNESS_MM = 2;
 const CUT_STEP_MM = 5;
 
 function ryaLengths(): FigureTableData {

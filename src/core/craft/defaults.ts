@@ -52,6 +52,8 @@ export const NAIL_DIAMETER_MM = 1.6;
 export const RAIL_MARGIN_MM = 20;
 /** P: rows of twining or scrap at each edge that set zigzag ends even. */
 export const SPACING_ROWS = { fewest: 3, most: 4 } as const;
+/** P: stout cardboard, for a card strands are wound on. */
+export const CARD_THICKNESS_MM = 2;
 /** P: the spacer card is this much wider than the warp. */
 export const SPACER_CARD_EXTRA_MM = 20;
 

@@ -11,11 +11,16 @@ export interface Uncertainties {
   readonly tex: number;
 }
 
-/** Picks guessed from the yarn's thickness, or counted on a swatch. */
+/** D, the parts estimated. Picks guessed from the yarn's thickness, or counted on a swatch. */
 export const UNCERTAINTIES = {
   unmeasured: { width: 0.01, height: 0.01, picks: 0.08, crimp: 0.02, tex: 0.025 },
   swatch: { width: 0.01, height: 0.01, picks: 0.03, crimp: 0.02, tex: 0.025 },
+  /** Of yarn in rows whose number is given: neither height nor picks count. */
+  rowsGiven: { width: 0.01, height: 0, picks: 0, crimp: 0.02, tex: 0.025 },
 } as const satisfies Record<string, Uncertainties>;
+
+/** P: strands that are cut one by one. */
+export const CUT_STRANDS_MARGIN = 0.05;
 
 /** One-sided 95 %. */
 const COVERAGE = 1.645;

@@ -49,17 +49,17 @@ export function countWarp(warp: Warp, loom: Loom, dressed: DressedWarp, settings
 const sum = (uses: readonly YarnUse[], of: 'threadMm' | 'yarnMm'): number => uses.reduce((total, use) => total + use[of], 0);
 
 /** The row a load mostly goes into: that of the band which takes most of the yarn. */
-function mainRow(uses: readonly YarnUse[]): number | undefined {
+export function mainRow(uses: readonly YarnUse[]): number | undefined {
   return [...uses].sort((a, b) => b.threadMm - a.threadMm).find(({ rowMm }) => rowMm !== undefined)?.rowMm;
 }
 
-interface Loads {
+export interface Loads {
   readonly count: number;
   /** Loads that begin and end inside the cloth, with two tails each. */
   readonly joined: number;
 }
 
-function loadsFor(uses: readonly YarnUse[], loadMm: number): Loads {
+export function loadsFor(uses: readonly YarnUse[], loadMm: number): Loads {
   const shuttleMm = sum(uses.filter(({ carry }) => carry === 'shuttle'), 'threadMm');
   const byTheRowMm = sum(uses.filter(({ carry }) => carry === 'by-the-row'), 'threadMm');
   const joined = ceilSafe(shuttleMm / loadMm);
@@ -67,7 +67,7 @@ function loadsFor(uses: readonly YarnUse[], loadMm: number): Loads {
 }
 
 /** Strands wound together, on average: bands may take other numbers of them. */
-function strandsOnShuttle(uses: readonly YarnUse[]): number {
+export function strandsOnShuttle(uses: readonly YarnUse[]): number {
   const wound = uses.filter(({ carry }) => carry === 'shuttle');
   const threadMm = sum(wound, 'threadMm');
   return threadMm === 0 ? 0 : sum(wound, 'yarnMm') / threadMm;

@@ -1,33 +1,40 @@
 /** Picks of every weft yarn between these ends: how close rows lie, and what one pick takes. */
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { weftWaveRange } from '#core/craft/crimp.ts';
-import { mainWeft, type WovenBand } from '#core/craft/frame-loom/add-up.ts';
-import { pickLength, type PickGeometry } from '#core/craft/picks.ts';
+import { pickLength } from '#core/craft/picks.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import { noteThread, type ThreadWorkings } from '#core/craft/show-how/explain-thread.ts';
 import { asWound, type WarpWorkings } from '#core/craft/show-how/explain-warp.ts';
 import { noteBend, noteWaveRange } from '#core/craft/show-how/explain-wave.ts';
-import { from, given } from '#core/craft/show-how/notebook.ts';
+import { from, given, standing } from '#core/craft/show-how/notebook.ts';
 import type { OnLoom } from '#core/craft/show-how/on-loom.ts';
 import { RULES } from '#core/craft/show-how/sources.ts';
 import type { Working, WorkingInput } from '#core/craft/show-how/working.ts';
-import { picksOn, pickSpacingOn } from '#core/craft/techniques/technique.ts';
+import { pickSpacingOn, threadInPicks, type LaidPicks } from '#core/craft/techniques/technique.ts';
+import { diameterTogether } from '#core/craft/yarn/diameter.ts';
 
 export interface PickWorkings {
+  /** From row to row. */
   readonly spacing: Working;
   readonly step: Working;
   readonly turn: Working;
   readonly pick: Working;
+  /** Of the weft, compressed, as many strands as lie in a row. */
+  readonly weftDiameter: Working;
+  readonly strands: WorkingInput;
+  /** Between the ends the weft meets. */
+  readonly endSpacing: Working;
+  readonly ends: Working;
 }
 
 /** What the bands go on from. */
 export interface WeftWorkings {
   readonly threads: ReadonlyMap<string, ThreadWorkings>;
-  /** Of the yarns picks are woven with. */
+  /** By `pickKey`. */
   readonly picks: ReadonlyMap<string, PickWorkings>;
-  /** From row to row, of every yarn. */
+  /** From row to row, of every yarn with its own strands. */
   readonly spacings: ReadonlyMap<string, Working>;
-  /** The role of the yarn most picks are woven with; its picks are called `weft`. */
+  /** The `pickKey` of the picks most rows are woven in; those are called `weft`. */
   readonly main: string;
 }
 
@@ -38,45 +45,65 @@ export function ofRole<T>(workings: ReadonlyMap<string, T>, role: string): T {
   return found;
 }
 
-function noteSpacing({ book, piece }: OnLoom, role: string, prefix: string, thread: ThreadWorkings): Working {
+function noteSpacing({ book, piece }: OnLoom, prefix: string, weftDiameter: Working, value: number): Working {
   const { beat } = piece.laid;
-  const what = { id: `${prefix}pickSpacingMm`, name: 'from row to row', value: pickSpacingOn(piece.laid, role), unit: 'mm' } as const;
+  const what = { id: `${prefix}pickSpacingMm`, name: 'from row to row', value, unit: 'mm' } as const;
   if (beat.picksPerCm !== undefined) {
     const counted = given({ symbol: 'n', name: 'rows in a centimetre', value: beat.picksPerCm, unit: 'per-cm' }, '/beat/picksPerCm', 'measured');
     return book.note({ ...what, formula: '10 / n', inputs: [counted], ...RULES.swatch });
   }
   const beta = given({ symbol: 'beta', name: 'rows in one thickness of the weft', value: beat.picksPerWeftDiameter, unit: 'ratio' }, '/beat/picksPerWeftDiameter', 'practice');
-  return book.note({ ...what, formula: 'd2 / beta', inputs: [from('d2', thread.compressed), beta], ...RULES.beat });
+  return book.note({ ...what, formula: 'd2 / beta', inputs: [from('d2', weftDiameter), beta], ...RULES.beat });
+}
+
+type Met = Pick<PickWorkings, 'weftDiameter' | 'strands' | 'endSpacing' | 'ends'> & { readonly warpDiameter: Working };
+
+/** The weft with as many strands as the band takes, and the ends it meets: two as one in basket weave. */
+function noteMeeting({ book, piece }: OnLoom, prefix: string, laid: LaidPicks, warp: WarpWorkings, thread: ThreadWorkings): Met {
+  const { strands, pairs } = laid.pick;
+  const own = strands === undefined ? thread.strands : standing({ symbol: 'm', name: 'strands in a row', value: strands, unit: 'count' }, RULES.bandStrands);
+  const weftDiameter = strands === undefined ? thread.compressed : book.note({
+    id: `${prefix}weftDiameterMm`, name: 'thickness of the strands in a row, beaten down', formula: 'd * sqrt(n / m)', inputs: [from('d', thread.compressed), { ...own, symbol: 'n' }, thread.strands],
+    value: threadInPicks(piece.laid, laid.pick).compressedMm, unit: 'mm', ...RULES.together,
+  });
+  if (pairs !== true) return { weftDiameter, strands: own, endSpacing: warp.spacing, ends: warp.working, warpDiameter: warp.workingDiameter };
+  return {
+    weftDiameter, strands: own,
+    endSpacing: book.note({ id: `${prefix}endSpacingMm`, name: 'between pairs of ends', formula: '2 * p', inputs: [from('p', warp.spacing)], value: laid.spacingMm, unit: 'mm', ...RULES.loom }),
+    ends: book.note({ id: `${prefix}workingEnds`, name: 'pairs of ends', formula: 'floor(E / 2)', inputs: [asWound('E', warp.working)], value: laid.workingEnds, unit: 'count', ...RULES.count }),
+    warpDiameter: book.note({ id: `${prefix}warpDiameterMm`, name: 'thickness of a pair of ends', formula: 'sqrt(2) * d', inputs: [from('d', warp.workingDiameter)], value: diameterTogether(warp.workingDiameter.value, 2), unit: 'mm', ...RULES.together }),
+  };
 }
 
 interface Laid {
   readonly prefix: string;
-  readonly geometry: PickGeometry;
+  readonly geometry: LaidPicks;
   readonly spacing: Working;
+  readonly endSpacing: Working;
   readonly D: WorkingInput;
 }
 
-function noteWave({ book, piece }: OnLoom, warp: WarpWorkings, { prefix, geometry, spacing, D }: Laid): Working {
+function noteWave({ book, piece }: OnLoom, { prefix, geometry, spacing, endSpacing, D }: Laid): Working {
   const what = { id: `${prefix}waveMm`, name: 'wave of the weft', value: geometry.waveMm, unit: 'mm' } as const;
   if (piece.parts.mode === 'straight-warp') return book.note({ ...what, formula: 'D', inputs: [D], ...RULES.peirce });
-  const range = weftWaveRange(geometry.diameterSumMm, warp.spacing.value, geometry.pickSpacingMm);
+  const range = weftWaveRange(geometry.diameterSumMm, endSpacing.value, geometry.pickSpacingMm);
   if (range === undefined) throw new Error('picks that jam were laid');
   const ids = { min: `${prefix}leastWaveMm`, max: `${prefix}mostWaveMm` };
-  const { min, max } = noteWaveRange(book, ids, { D, p1: from('p1', warp.spacing), p2: from('p2', spacing) }, range);
+  const { min, max } = noteWaveRange(book, ids, { D, p1: from('p1', endSpacing), p2: from('p2', spacing) }, range);
   return book.note({ ...what, formula: 'min(b, max(a, D / 2))', inputs: [from('a', min), from('b', max), D], ...RULES.peirce });
 }
 
-function notePicks(of: OnLoom, role: string, prefix: string, warp: WarpWorkings, thread: ThreadWorkings, spacing: Working): PickWorkings {
-  const { book, piece } = of;
-  const geometry = picksOn(piece.laid, { role });
+function notePicks(of: OnLoom, prefix: string, geometry: LaidPicks, warp: WarpWorkings, thread: ThreadWorkings): PickWorkings {
+  const { book } = of;
+  const { warpDiameter, ...met } = noteMeeting(of, prefix, geometry, warp, thread);
+  const spacing = noteSpacing(of, prefix, met.weftDiameter, geometry.pickSpacingMm);
   const sum = book.note({
-    id: `${prefix}diameterSumMm`, name: 'warp and weft together', formula: 'd1 + d2', inputs: [from('d1', warp.workingDiameter), from('d2', thread.compressed)],
+    id: `${prefix}diameterSumMm`, name: 'warp and weft together', formula: 'd1 + d2', inputs: [from('d1', warpDiameter), from('d2', met.weftDiameter)],
     value: geometry.diameterSumMm, unit: 'mm', ...RULES.arithmetic,
   });
-  const D = from('D', sum);
-  const p = from('p', warp.spacing);
+  const [D, p] = [from('D', sum), from('p', met.endSpacing)];
   book.note({ id: `${prefix}tightness`, name: 'share of the room between two ends that warp and weft fill', formula: 'D / p', inputs: [D, p], value: geometry.tightness, unit: 'ratio', ...RULES.loom });
-  const wave = noteWave(of, warp, { prefix, geometry, spacing, D });
+  const wave = noteWave(of, { prefix, geometry, spacing, endSpacing: met.endSpacing, D });
   const step = noteBend(book, {
     prefix, of: 'weft', lengthId: 'stepMm', spacing: p, D, wave: from('h', wave), lengthMm: geometry.stepMm, angleRad: geometry.angleRad, crimp: geometry.crimp,
   });
@@ -84,27 +111,28 @@ function notePicks(of: OnLoom, role: string, prefix: string, warp: WarpWorkings,
     id: `${prefix}turnMm`, name: 'weft round the end at a selvedge', formula: 'hypot(pi * D / 2, p2)', inputs: [D, from('p2', spacing)], value: geometry.turnMm, unit: 'mm', ...RULES.turn,
   });
   const pick = book.note({
-    id: `${prefix}pickMm`, name: 'weft of one pick, its turn included', formula: '(E - 1) * l + t', inputs: [asWound('E', warp.working), from('l', step), from('t', turn)],
-    value: pickLength(piece.laid.workingEnds, geometry), unit: 'mm', ...RULES.peirce,
+    id: `${prefix}pickMm`, name: 'weft of one pick, its turn included', formula: '(E - 1) * l + t', inputs: [asWound('E', met.ends), from('l', step), from('t', turn)],
+    value: pickLength(geometry.workingEnds, geometry), unit: 'mm', ...RULES.peirce,
   });
-  return { spacing, step, turn, pick };
+  return { ...met, spacing, step, turn, pick };
 }
 
-/** Both diameters of every yarn, and one pick of each that is woven in picks. */
-export function noteWeft(of: OnLoom, bands: readonly WovenBand[], warp: WarpWorkings): WeftWorkings {
+/** Both diameters of every yarn, and one pick of each way picks are woven in. */
+export function noteWeft(of: OnLoom, main: string, warp: WarpWorkings): WeftWorkings {
   const { book, piece } = of;
-  const main = mainWeft(bands, piece.laid).geometry.pick.role;
   const threads = new Map<string, ThreadWorkings>();
-  const picks = new Map<string, PickWorkings>();
-  const spacings = new Map<string, Working>();
   for (const [role, yarn] of piece.yarns) {
-    if (yarn === undefined) continue;
-    const thread = noteThread(book, { prefix: `yarns.${role}.`, path: below('/yarns', role), yarn, defaultK: ASHENHURST_K.weft });
-    const prefix = role === main ? 'weft.' : `yarns.${role}.`;
-    const spacing = noteSpacing(of, role, prefix, thread);
-    threads.set(role, thread);
-    spacings.set(role, spacing);
-    if (piece.laid.picks.has(role)) picks.set(role, notePicks(of, role, prefix, warp, thread, spacing));
+    if (yarn !== undefined) threads.set(role, noteThread(book, { prefix: `yarns.${role}.`, path: below('/yarns', role), yarn, defaultK: ASHENHURST_K.weft }));
+  }
+  const picks = new Map<string, PickWorkings>();
+  for (const [key, geometry] of piece.laid.picks) {
+    const { role } = geometry.pick;
+    const prefix = key === main ? 'weft.' : key === role ? `yarns.${role}.` : `picks.${key}.`;
+    picks.set(key, notePicks(of, prefix, geometry, warp, ofRole(threads, role)));
+  }
+  const spacings = new Map<string, Working>();
+  for (const [role, thread] of threads) {
+    spacings.set(role, picks.get(role)?.spacing ?? noteSpacing(of, `yarns.${role}.`, thread.compressed, pickSpacingOn(piece.laid, role)));
   }
   return { threads, picks, spacings, main };
 }

@@ -15,6 +15,7 @@ import {
   placeShape,
   type BandGrid,
   type PlacedShape,
+  type YarnArea,
 } from '#core/craft/techniques/colour-rows.ts';
 import { LONGEST_MM, readName, readRole } from '#core/craft/techniques/read-rules.ts';
 import { readShape } from '#core/craft/techniques/read-shape.ts';
@@ -74,7 +75,7 @@ function read(fields: Fields): TabbyBand {
 }
 
 /** How a yarn of this band, the ground or a shape's, lies in its rows. */
-function pickIn({ strands, basket }: TabbyBand, role: string): PickOf {
+export function pickIn({ strands, basket }: TabbyBand, role: string): PickOf {
   const together = strands ?? (basket === true ? BASKET_STRANDS : undefined);
   return { role, ...present({ strands: together }), ...(basket === true ? { pairs: true as const } : {}) };
 }
@@ -179,26 +180,38 @@ function lyingIn(band: TabbyBand, loom: DressedLoom): (role: string) => Lying {
   };
 }
 
-function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0): Woven {
+export interface ColourRows {
+  readonly rows: number;
+  /** Rows of the ground from edge to edge. */
+  readonly fullRows: number;
+  /** The rows shapes may stand in, each in its areas. */
+  readonly shaped: readonly (readonly YarnArea[])[];
+}
+
+/** Rows from `fromRow` on. */
+export function colourRows(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0): ColourRows {
   const grid = gridOf(band, heightMm, loom);
   const shapes = (band.shapes ?? []).map((shape) => placeShape(shape, grid));
   const standing = rowsWithShapes(shapes, grid.rows);
   const [first, end] = [Math.max(fromRow, standing.first), Math.max(fromRow, standing.end)];
   const rows = Math.max(0, grid.rows - fromRow);
+  const shaped = Array.from({ length: end - first }, (_, row) => areasOfRow(first + row, band.yarn, shapes, grid.ends));
+  return { rows, fullRows: rows - shaped.length, shaped };
+}
+
+function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0): Woven {
+  const { rows, fullRows, shaped } = colourRows(band, heightMm, loom, fromRow);
+  const { pickSpacingMm, workingEnds } = picksOn(loom, pickIn(band, band.yarn));
   const lying = lyingIn(band, loom);
-  const pickMm = (role: string): number => pickLength(grid.ends, lying(role).picks);
-  const threadMm = new Map([[band.yarn, (rows - (end - first)) * pickMm(band.yarn)]]);
-  let colourChanges = 0;
-  for (let row = first; row < end; row += 1) {
-    const areas = areasOfRow(row, band.yarn, shapes, grid.ends);
-    colourChanges += areas.length - 1;
-    for (const area of areas) {
-      const areaMm = areaLength(area, lying(area.yarn).picks, lying(area.yarn).thread.compressedMm);
-      threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + areaMm);
-    }
+  const pickMm = (role: string): number => pickLength(workingEnds, lying(role).picks);
+  const threadMm = new Map([[band.yarn, fullRows * pickMm(band.yarn)]]);
+  for (const area of shaped.flat()) {
+    const areaMm = areaLength(area, lying(area.yarn).picks, lying(area.yarn).thread.compressedMm);
+    threadMm.set(area.yarn, (threadMm.get(area.yarn) ?? 0) + areaMm);
   }
+  const colourChanges = shaped.reduce((sum, areas) => sum + areas.length - 1, 0);
   return {
-    picks: { key: pickKey(pickIn(band, band.yarn)), rows, rawRows: Math.max(0, heightMm / grid.pickSpacingMm - fromRow) },
+    picks: { key: pickKey(pickIn(band, band.yarn)), rows, rawRows: Math.max(0, heightMm / pickSpacingMm - fromRow) },
     counts: { picks: rows },
     uses: [...threadMm].map(([role, mm]): YarnUse => ({
       role,

@@ -25,14 +25,20 @@ export function ellipticE(m: number): number {
   return (Math.PI / (2 * a)) * (1 - sum);
 }
 
+/** The ellipse of a twined strand: how far it is stretched, squared, and its parameter m. */
+export function twinedEllipse(spacingMm: number, diameterSumMm: number, weftMm: number): { readonly stretch: number; readonly m: number } {
+  const a = (Math.PI / (2 * spacingMm)) ** 2;
+  const stretch = 1 + a * diameterSumMm ** 2;
+  return { stretch, m: (a * (diameterSumMm ** 2 - weftMm ** 2)) / stretch };
+}
+
 /**
  * Strand over spacing: its axis swings D/2 out of the cloth and d₂/2 along it, once each
  * way between two ends, which is an ellipse stretched along the row.
  */
 export function twiningRatio(spacingMm: number, diameterSumMm: number, weftMm: number): number {
-  const a = (Math.PI / (2 * spacingMm)) ** 2;
-  const m = (a * (diameterSumMm ** 2 - weftMm ** 2)) / (1 + a * diameterSumMm ** 2);
-  return (2 / Math.PI) * Math.sqrt(1 + a * diameterSumMm ** 2) * ellipticE(m);
+  const { stretch, m } = twinedEllipse(spacingMm, diameterSumMm, weftMm);
+  return (2 / Math.PI) * Math.sqrt(stretch) * ellipticE(m);
 }
 
 export interface TwinedRow {
