@@ -41,7 +41,7 @@ const CHANGES: Readonly<Record<string, object>> = {
   'with every default': { allowances: {}, loom: { nailPitchMm: 10, warping: 'zigzag', insideHeightMm: 520 }, dowel: { diameterMm: 12 } },
   'without a dowel': { dowel: undefined },
   'lashed to its dowel': { dowel: { diameterMm: 12, fixing: 'lashed' } },
-  'tied to its dowel': { dowel: { diameterMm: 12, fixing: 'tied' } },
+  'tied to its dowel': { dowel: { diameterMm: 12, fixing: 'tied' }, loom: { ...workedPiece.loom, insideHeightMm: 560 } },
   'with one band of basket weave and one of doubled weft': {
     bands: workedPiece.bands.map((band, index) => (index === 1 ? { ...band, basket: true } : index === 7 ? { ...band, strands: 2 } : index === 2 ? { ...band, edgeEnds: 1 } : band)),
   },
