@@ -100,6 +100,21 @@ describe('jamming', () => {
     expect(weftWaveRange(1, p, p) !== undefined).toBe(feasible);
   });
 
+  test.each([1e-3, 0.37, 1, 12.3, 1e4])('square cloth of D = %f jams at p = D sin 60°, neither sooner nor later, whatever rounding does (Peirce’s limit is a ratio)', (D) => {
+    const p = D * Math.sin(Math.PI / 3);
+    expectClose(wave(p, D, D / 2).crimp, 0.209199576, 1e-7);
+    expect(waveOf(p * 0.9999, D, D / 2)).toBeUndefined();
+    expectClose(weftWaveRange(D, p, p)?.min ?? Number.NaN, D / 2, 1e-7);
+    expect(weftWaveRange(D, p * 0.9999, p * 0.9999)).toBeUndefined();
+    expectClose(jammingSum(D, p, p), 1, 1e-12);
+  });
+
+  test('warp closer than D leaves the weft less than the whole wave (put back into Peirce’s equation, no straight part is left)', () => {
+    const max = weftWaveRange(2, 1.8, 3)?.max ?? Number.NaN;
+    expectClose(max, 1.1282202, 1e-7);
+    expectClose(wave(1.8, 2, max).lengthMm, 2 * wave(1.8, 2, max).angleRad, 1e-6);
+  });
+
   test('ends closer than both yarns together jam on a straight warp', () => {
     expect(pickGeometry({ spacingMm: 2, warpDiameterMm: 0.9, weftDiameterMm: 1.5, pickSpacingMm: 1.8, mode: 'straight-warp' })).toBeUndefined();
   });

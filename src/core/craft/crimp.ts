@@ -19,14 +19,10 @@ export interface Wave {
 /** Rounding may leave a jammed geometry this far (relative) on the wrong side. */
 const HAIR = 1e-9;
 
-function rootOrZero(square: number, scale: number): number | undefined {
-  if (square >= 0) return Math.sqrt(square);
-  return square > -HAIR * scale ? 0 : undefined;
-}
-
 /** Length of the straight part between two arcs, L = √(p² + h² − 2Dh); undefined where the yarns jam. */
 export function straightPart(p: number, D: number, h: number): number | undefined {
-  return rootOrZero(p * p + h * h - 2 * D * h, D * D);
+  const square = p * p + h * h - 2 * D * h;
+  return square < -HAIR * D * D ? undefined : Math.sqrt(Math.max(0, square));
 }
 
 /**

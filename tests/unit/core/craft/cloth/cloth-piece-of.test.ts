@@ -6,6 +6,7 @@ import { NEUTRAL } from '#core/craft/cloth/colour.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
+import { pieceOf, pieceWith, planOf } from '../a-piece.ts';
 
 const LOW_TIDE: FrameLoomPiece = JSON.parse(readFileSync(new URL('../../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8'));
 
@@ -59,6 +60,43 @@ describe('a cloth from a described piece and its plan', () => {
     const own = clothOf({ ...LOW_TIDE, yarns: { ...LOW_TIDE.yarns, water } });
     expect(band(own, 'sky').colour).toBe(NEUTRAL);
     expect(own.loom).toEqual({ insideWidthMm: 500, insideHeightMm: 640, bottomMm: 90 });
+  });
+
+  it('says of soumak, roving, loops and twining what their bands say', () => {
+    const own = clothOf(pieceOf(
+      { technique: 'soumak', name: 'ridge', yarn: 'ground', over: 4, back: 2, rows: 4, tabbyBetween: 2, tabbyYarn: 'ground' },
+      { technique: 'roving', name: 'cloud', yarn: 'ground', over: 4, bulgeMm: 12, heightMm: 40 },
+      { technique: 'roving', name: 'clouds', yarn: 'ground', over: 4, bulgeMm: 12, heightMm: 40, passes: 2 },
+      { technique: 'loop-pile', name: 'rod', yarn: 'ground', rodMm: 8, rows: 3, heightMm: 20 },
+      { technique: 'loop-pile', name: 'loops', yarn: 'ground', loopMm: 20, rows: 3, heightMm: 20 },
+      { technique: 'twining', name: 'twine', yarn: 'ground', rows: 2 },
+    ));
+    expect(band(own, 'ridge')).toMatchObject({ technique: 'soumak', rows: 4, over: 4, back: 2, tabbyBetween: 2 });
+    expect([band(own, 'cloud'), band(own, 'clouds')]).toMatchObject([{ over: 4, passes: 1 }, { over: 4, passes: 2 }]);
+    expect(band(own, 'rod')).toMatchObject({ loopMm: expect.closeTo(Math.PI * 4, 9) as number });
+    expect(band(own, 'loops')).toMatchObject({ loopMm: 20, rows: 3 });
+    expect(band(own, 'twine')).toMatchObject({ technique: 'twining', rows: 2 });
+  });
+
+  it('gives soumak the height that its plain picks leave it', () => {
+    const ridge = (tabbyBetween: number): unknown => {
+      const piece = pieceOf({ technique: 'soumak', name: 'ridge', yarn: 'ground', over: 4, back: 2, rows: 4, tabbyBetween, tabbyYarn: 'ground' });
+      const found = band(clothOf(piece), 'ridge');
+      return found.technique === 'soumak' && found.soumakShare * (planOf(piece).bands[0]?.heightMm ?? 0);
+    };
+    expect(ridge(0)).toBeCloseTo(4 * 1.43 * 1.011937, 4);
+    expect(ridge(1)).toBeCloseTo(4 * 1.43 * 1.011937, 4);
+  });
+
+  it('sets pile without any tabby on a ground of its own', () => {
+    const colour = '#2f5366';
+    const own = clothOf(pieceWith({
+      size: { widthMm: 300, heightMm: 24 }, yarns: { ground: { metresPer100g: 180, colour } },
+      bands: [{ technique: 'rya', name: 'fringe', yarn: 'ground', strands: 3, legEnds: 1, pileMm: 80, trimMm: 5, rows: 2, heightMm: 24 }],
+    }));
+    const fringe = band(own, 'fringe');
+    expect(fringe.technique === 'rya' && fringe.groundColour).toMatch(/^#[0-9a-f]{6}$/);
+    expect(fringe.technique === 'rya' && fringe.groundColour).not.toBe(colour);
   });
 
   it('stays within the budget at every size it stands in a page', () => {

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { actText, changeTyped, readAct, typeIn, type Act } from '#core/craft/piece-form/change-typed.ts';
+import { actText, bandInHand, changeTyped, readAct, typeIn, type Act } from '#core/craft/piece-form/change-typed.ts';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
 import { typePiece } from '#core/craft/piece-form/type-piece.ts';
 import { pieceOf } from '../a-piece.ts';
@@ -58,6 +58,16 @@ describe('rows of the form', () => {
     const soumak = typeIn(form, 'bands.0.technique', 'soumak');
     expect(soumak.bands[0]?.texts).toMatchObject({ over: '4', back: '2', rows: '4', tabbyBetween: '2', tabbyYarn: '1' });
     expect(typeIn(soumak, 'bands.0.technique', 'tabby').bands[0]?.texts).toMatchObject({ heightMm: '3', name: 'foot' });
+  });
+});
+
+describe('the band that hands go on with', () => {
+  test.each<[Act, number | null]>([
+    [{ do: 'add-band', after: -1 }, 0], [{ do: 'add-band', after: 2 }, 3], [{ do: 'copy-band', band: 1 }, 2], [{ do: 'later', band: 1 }, 2],
+    [{ do: 'sooner', band: 2 }, 1], [{ do: 'sooner', band: 0 }, 0], [{ do: 'add-shape', band: 1 }, 1], [{ do: 'take-out-shape', band: 1, shape: 0 }, 1],
+    [{ do: 'take-out-band', band: 1 }, null], [{ do: 'add-yarn' }, null], [{ do: 'look' }, null],
+  ])('after %o is %s', (act, band) => {
+    expect(bandInHand(act)).toBe(band);
   });
 });
 

@@ -1,0 +1,27 @@
+import { describe, expect, test } from 'vitest';
+import { madeFor } from '#core/craft/made-for.ts';
+import type { Piece } from '#core/craft/piece.ts';
+import { PLAIN_PIECE, pieceWith } from './a-piece.ts';
+
+describe('the piece a page reckons with', () => {
+  test('is the pattern for a student who changed nothing', () => {
+    expect(madeFor(PLAIN_PIECE, {}, 'cm')).toMatchObject({ piece: PLAIN_PIECE, isOwn: false, problems: [], plan: { ends: { count: 62 } } });
+  });
+
+  test('is her own where she has one that can be woven', () => {
+    const own = madeFor(PLAIN_PIECE, { loom: { nailPitchMm: 8 } }, 'cm');
+    expect(own).toMatchObject({ isOwn: true, problems: [], piece: { loom: { nailPitchMm: 8 } } });
+    expect(own?.plan.ends.count).toBeGreaterThan(62);
+  });
+
+  test('falls back to the pattern where hers cannot be woven any more, and says why', () => {
+    const made = madeFor(PLAIN_PIECE, { loom: { insideHeightMm: 100 } }, 'cm');
+    expect(made).toMatchObject({ isOwn: false, piece: PLAIN_PIECE });
+    expect(made?.problems.map(({ code }) => code)).toContain('E_FIT');
+  });
+
+  test('is none where the pattern is missing or cannot be woven', () => {
+    expect(madeFor(null, {}, 'cm')).toBeNull();
+    expect(madeFor(pieceWith({ size: { widthMm: 300, heightMm: 5_000 } }) as Piece, {}, 'cm')).toBeNull();
+  });
+});
