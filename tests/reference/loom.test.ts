@@ -2,7 +2,7 @@
 import { describe, expect, test } from 'vitest';
 import { endsFor, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
 import { cordLength, cordTension, leastDowelDiameter } from '#core/craft/hanging.ts';
-import { heightBeforeShrinking } from '#core/craft/loom-height.ts';
+import { heightAfterShrinking, heightBeforeShrinking, topAllowance } from '#core/craft/loom-height.ts';
 import { endsPerMm, nailsUsed, staggeredPitch, workingSpacing, zigzagGaps } from '#core/craft/nails.ts';
 import { combinedUncertainty, marginFor, tolerableShortage, UNCERTAINTIES } from '#core/craft/purchase.ts';
 import { tapestryRate } from '#core/craft/time.ts';
@@ -75,6 +75,17 @@ describe('allowances', () => {
     expectClose(1 - 65 / 75, 0.13333333, 1e-7);
   });
 
+  test('what shrinks by a tenth off the loom and by a twentieth in water keeps 85.5 % of its height (shares multiply)', () => {
+    expectClose(heightAfterShrinking(1000, 0.1, 0.05), 855, 1e-12);
+    expectClose(heightBeforeShrinking(855, 0.1, 0.05), 1000, 1e-12);
+  });
+
+  test('a dowel of 30 mm takes half its girth and a seat of unwoven warp, where 40 mm were asked (geometry)', () => {
+    expectClose(topAllowance(40, 30), Math.PI * 15 + 5, 1e-12);
+    expectClose(topAllowance(60, 30), 60, 1e-12);
+    expectClose(topAllowance(10, undefined), 40, 1e-12);
+  });
+
   test('8.1 in on the loom that finish at 7.5 drew in by 7.4 % (M. Petrini, August 2023)', () => {
     expectClose(widthBeforeDrawIn(7.5, 0.074074074), 8.1, 1e-7);
     expectPrinted((1 - 7.5 / 8.1) * 100, '7.4');
@@ -105,7 +116,7 @@ describe('margins', () => {
     expectClose(marginFor(UNCERTAINTIES.swatch), 0.07583, 1e-3);
   });
 
-  test.each([[50, 4.5], [100, 4.5], [25, 2.25], [150, 6.75], [250, 9], [400, 12], [800, 15]])(
+  test.each([[50, 4.5], [75, 4.5], [100, 4.5], [25, 2.25], [150, 6.75], [250, 9], [400, 12], [800, 15]])(
     'a prepacked ball of %i g may be %f g light (Directive 76/211/EEC, Annex I 2.4)',
     (nominal, shortage) => { expectClose(tolerableShortage(nominal), shortage, 1e-12); },
   );

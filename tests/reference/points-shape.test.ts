@@ -2,7 +2,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import type { ShapePoint } from '#core/craft/piece.ts';
-import { areaOfPoints, boxOfPoints, runsOfPoints } from '#core/craft/points-shape.ts';
+import { areaOfPoints, boxOfPoints, climbOfPoints, runsOfPoints } from '#core/craft/points-shape.ts';
 import { rowsOfShape, stepShape } from '#core/craft/shapes.ts';
 import { placeShape } from '#core/craft/techniques/colour-rows.ts';
 import { cases } from '../support/random-cases.ts';
@@ -132,5 +132,35 @@ describe('the ends of a shape drawn by points', () => {
     expect(rows).toHaveLength(30);
     expect(rows[0]).toEqual([{ start: 20, ends: 20 }]);
     expect(rows[20]).toEqual([{ start: 20, ends: 5 }, { start: 35, ends: 5 }]);
+  });
+});
+
+describe('a shape drawn by points, beside plain ones', () => {
+  const on = { rows: 40, ends: 60, spacingMm: 5, pickSpacingMm: 2, widthMm: 300 };
+  const drawn = (points: readonly (readonly [number, number])[]): readonly ShapePoint[] => points.map(([xMm, yMm]) => ({ xMm, yMm }));
+
+  test('leans as a rectangle of the same size does (the same cloth described twice)', () => {
+    const points = drawn([[0, 0], [52, 0], [52, 80], [0, 80]]);
+    const twice = [{ shape: 'points', points } as const, { shape: 'rectangle', baseMm: 52, heightMm: 80, symmetric: false } as const];
+    const [byPoints, plain] = twice.map((shape) => placeShape({ ...shape, yarn: 'red', centreMm: 100, leanMm: 70 }, on).rows.map(([run]) => run?.start));
+    expect(byPoints).toHaveLength(40);
+    byPoints?.forEach((start, row) => { expect(Math.abs((start ?? Number.NaN) - (plain?.[row] ?? Number.NaN))).toBeLessThanOrEqual(1); });
+    expect(byPoints?.at(-1)).toBeGreaterThan((byPoints?.[0] ?? 0) + 12);
+  });
+
+  test('has no area in a row where it is thinner than half an end (counted by hand)', () => {
+    const sliver = drawn([[0, 0], [30, 0], [30, 2], [11, 2], [11, 4], [10, 4], [10, 2], [0, 2]]);
+    expect(runsOfPoints(sliver, { ...on, rows: 2, leftEnds: () => 0 })).toEqual([[{ start: 0, ends: 6 }], []]);
+  });
+
+  test('is one area where a notch is thinner than an end, two where it is wider (counted by hand)', () => {
+    const notched = (width: number): unknown => runsOfPoints(drawn([[0, 0], [50, 0], [50, 2], [20 + width, 2], [20 + width, 0.5], [20, 0.5], [20, 2], [0, 2]]), { ...on, rows: 1, leftEnds: () => 0 });
+    expect(notched(1)).toEqual([[{ start: 0, ends: 10 }]]);
+    expect(notched(10)).toEqual([[{ start: 0, ends: 4 }, { start: 6, ends: 4 }]]);
+  });
+
+  test('climbs as high as it is where every level meets it twice, and twice as high with two peaks (added by hand)', () => {
+    expect(climbOfPoints(drawn([[0, 0], [40, 0], [20, 30]]))).toBe(30);
+    expect(climbOfPoints(drawn([[0, 5], [20, 35], [40, 5], [60, 35], [80, 5]]))).toBe(60);
   });
 });

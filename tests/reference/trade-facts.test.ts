@@ -2,7 +2,7 @@
 import { describe, expect, test } from 'vitest';
 import { dowelLength } from '#core/craft/hanging.ts';
 import { endsOnNails, nailsOnRail } from '#core/craft/nails.ts';
-import { adviseSpacing } from '#core/craft/sett.ts';
+import { adviseSpacing, strandsFor } from '#core/craft/sett.ts';
 import { rovingDiameter } from '#core/craft/yarn/roving.ts';
 import { YARN_CLASSES } from '#core/craft/yarn/classes.ts';
 import { loftFromWraps } from '#core/craft/yarn/diameter.ts';
@@ -112,4 +112,11 @@ test('C6: two dowels for pieces of 16 in come from one length of 48, and one fit
   const frame = 20 * INCH;
   expect(endsOnNails(nailsOnRail(frame, HALF), 'zigzag') * QUARTER).toBeGreaterThan(16 * INCH);
   expect(dowel).toBeLessThan(frame);
+});
+
+test('strands are taken together until the wished share of the room is filled, and none fit where warp alone fills it (areas of circles added)', () => {
+  // 5 mm from end to end at 0.4 leave 2 mm, 0.8 of it warp: 1.2 mm of weft, as thick as four strands of 0.6 mm.
+  expect(strandsFor(5, 0.8, 0.6, 0.4)).toBe(4);
+  expect(strandsFor(5, 0.8, 3, 0.4)).toBe(1);
+  expect(strandsFor(5, 2, 0.6, 0.4)).toBeUndefined();
 });

@@ -9,20 +9,17 @@ import { columnOf, IMPERIAL, METRIC } from './worked-piece.ts';
 import { figures, same, TABLE } from './worked-piece-table.ts';
 
 describe('the worked piece', () => {
-  const metric = columnOf(METRIC);
-  const imperial = columnOf(IMPERIAL);
-
   test('has every row of the table', () => {
     expect(new Set(TABLE.map(([row]) => row.split(' ')[0])).size).toBe(84);
-    expect([...metric.keys()]).toEqual(TABLE.map(([row]) => row));
+    expect([...columnOf(METRIC).keys()]).toEqual(TABLE.map(([row]) => row));
   });
 
   test.each(TABLE)('row %s comes to %f, and to the same in inches', (row, value, unit, imperialValue) => {
-    const reckoned = metric.get(row) ?? Number.NaN;
-    const reckonedImperial = (imperial.get(row) ?? Number.NaN) / unit;
+    const reckoned = columnOf(METRIC).get(row) ?? Number.NaN;
+    const typedInInches = columnOf(IMPERIAL).get(row) ?? Number.NaN;
     if (Number.isInteger(value) && unit === same) expect(reckoned).toBeCloseTo(value, 9);
     else expectClose(reckoned, value, figures(value));
-    expectClose(reckonedImperial, imperialValue, figures(imperialValue));
-    expectClose(imperial.get(row) ?? Number.NaN, reckoned, 1e-12);
+    expectClose(typedInInches / unit, imperialValue, figures(imperialValue));
+    expectClose(typedInInches, reckoned, 1e-12);
   });
 });

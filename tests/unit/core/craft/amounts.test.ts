@@ -131,6 +131,7 @@ describe('an amount that is not told says why', () => {
     ['band.sky.stitches', 'E_ENUM A band of tabby has no stitches.'],
     ['band.fluff.rows', 'E_ENUM A band of roving has no rows.'],
     ['band.sky.toString', 'E_ENUM A band has no “toString”. It has height, rows, knots, stitches, strands, cut, yarn.'],
+    ['frame.sky.height', 'E_ENUM No amount is called “frame.sky.height”.'],
     ['loom.depth', 'E_ENUM No amount is called “loom.depth”.'],
   ])('%s: %s', (key, reason) => {
     expect(whyNot(key)).toBe(reason);

@@ -59,6 +59,11 @@ test('balls are whole, and say when the last is nearly used up', () => {
   expect(ballsFor(0, 90)).toEqual({ count: 0, leftOverMm: 0, tight: false });
 });
 
+test('a tenth of a ball left over is enough, less is tight', () => {
+  expect(ballsFor(90_000, 100)).toMatchObject({ count: 1, tight: false });
+  expect(ballsFor(90_001, 100)).toMatchObject({ count: 1, tight: true });
+});
+
 test('a margin covers what is not known', () => {
   expect(marginFor(UNCERTAINTIES.swatch)).toBeLessThan(marginFor(UNCERTAINTIES.unmeasured));
 });
@@ -66,6 +71,17 @@ test('a margin covers what is not known', () => {
 test('an edge that steps one end every row leans as end and row are to each other', () => {
   expect(slopeAngle(1, 1, { spacingMm: 5, pickSpacingMm: 5 })).toBeCloseTo(Math.PI / 4, 12);
   expect(slopeAngle(0, 1, { spacingMm: 5, pickSpacingMm: 5 })).toBe(0);
+});
+
+test.each([
+  ['60 rows of 50 ends, at 50 seconds each', { rows: 60, workingEnds: 50 }, 50 / 60],
+  ['360 changes of colour, at 10 seconds each', { colourChanges: 360 }, 1],
+  ['75 rya knots, of which an hour takes 150', { knots: 75 }, 0.5],
+  ['900 stitches, of which an hour takes 300', { stitches: 900 }, 3],
+  ['60 bundles of hem, of which an hour takes 120', { hemBundles: 60 }, 0.5],
+  ['240 ends to warp, of which an hour takes 120', { warpEnds: 240 }, 2],
+])('%s, take their time and no other', (_, work, hours) => {
+  expect(hoursOf({ ...NO_WORK, ...work }).likely - hoursOf(NO_WORK).likely).toBeCloseTo(hours, 12);
 });
 
 test('a piece with nothing to weave is still finished', () => {
