@@ -171,3 +171,26 @@ test('the demo series fits its own loom, and a narrower one with every second na
   expect(fitPiece(piece, {})).toMatchObject({ ok: true, warnings: [] });
   expect(fitPiece(piece, { widthMm: 300, loom: { nailPitchMm: 5, insideWidthMm: 400 } })).toMatchObject({ ok: true, value: { piece: { loom: { everyNthNail: 2 } } } });
 });
+
+describe('what her plan warns of', () => {
+  const yarns = { ground: { metresPer100g: 180 }, red: { metresPer100g: 180 }, blue: { metresPer100g: 180 } };
+  const pattern = pieceWith({ yarns, bands: [...PLAIN_PIECE.bands, { technique: 'twining', name: 'line', yarn: 'red', rows: 2 }] });
+  const warnings = (mine: MyPiece, of: Piece = pattern): string[] => {
+    const outcome = fitPiece(of, mine);
+    return outcome.ok ? outcome.warnings.map(({ code, path }) => `${code} ${path}`) : ['refused'];
+  };
+
+  test('is a yarn the pattern does not use either, but not one that only a band she leaves out was woven with', () => {
+    expect(warnings({})).toEqual(['W_UNUSED /yarns/blue', 'W_PARITY /warp/parity']);
+    expect(warnings({ way: { kind: 'fewer-bands', leaveOut: ['line'] } })).toEqual(['W_UNUSED /yarns/blue', 'W_PARITY /warp/parity']);
+  });
+
+  test('is anything else that her loom brings about', () => {
+    expect(warnings({ loom: { nailPitchMm: 30 } })).toContain('W_LOOSE /yarns/ground');
+  });
+
+  test('is a yarn of hers for a role that the pattern has no more, in words', () => {
+    const outcome = fitPiece(PATTERN, { yarns: { gold: { tex: 400 } } });
+    expect(outcome.ok && outcome.warnings.at(-1)).toEqual({ code: 'W_UNUSED', path: '/yarns/gold', message: 'The pattern has no yarn in the role “gold” any more.' });
+  });
+});
