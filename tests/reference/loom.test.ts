@@ -81,8 +81,8 @@ describe('allowances', () => {
   });
 
   test('a dowel of 30 mm takes half its girth and a seat of unwoven warp, where 40 mm were asked (geometry)', () => {
-    expectClose(topAllowance(40, 30), Math.PI * 15 + 5, 1e-12);
-    expectClose(topAllowance(60, 30), 60, 1e-12);
+    expectClose(topAllowance(40, { diameterMm: 30 }), Math.PI * 15 + 5, 1e-12);
+    expectClose(topAllowance(60, { diameterMm: 30 }), 60, 1e-12);
     expectClose(topAllowance(10, undefined), 40, 1e-12);
   });
 
