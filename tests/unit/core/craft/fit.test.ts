@@ -175,7 +175,7 @@ test('the demo series fits its own loom, and a narrower one with every second na
 describe('what her plan warns of', () => {
   const yarns = { ground: { metresPer100g: 180 }, red: { metresPer100g: 180 }, blue: { metresPer100g: 180 } };
   const pattern = pieceWith({ yarns, bands: [...PLAIN_PIECE.bands, { technique: 'twining', name: 'line', yarn: 'red', rows: 2 }] });
-  const warnings = (mine: MyPiece, of: Piece = pattern): string[] => {
+  const warnings = (mine: MyPiece, of = pattern): string[] => {
     const outcome = fitPiece(of, mine);
     return outcome.ok ? outcome.warnings.map(({ code, path }) => `${code} ${path}`) : ['refused'];
   };
