@@ -51,13 +51,14 @@ function scaleBand(band: Band, k: number): Band {
 
 /** Width, heights, shapes and pile of `piece` times `factor`; where no band fills, the height is what the bands come to. */
 export function scalePiece(piece: FrameLoomPiece, factor: number): FrameLoomPiece {
-  const { dowel, size } = piece;
+  const { dowel, size, finish } = piece;
   // A width that is no number must be refused as it is, not made into one.
   if (!isAboveZero(size.widthMm)) return piece;
   return withOwnHeight({
     ...piece,
     size: { widthMm: size.widthMm * factor, heightMm: size.heightMm * factor },
     ...(dowel?.lengthMm === undefined ? {} : { dowel: { ...dowel, lengthMm: dowel.lengthMm + (factor - 1) * size.widthMm } }),
+    ...(finish?.fringeMm === undefined ? {} : { finish: { ...finish, fringeMm: finish.fringeMm * factor } }),
     bands: piece.bands.map((band) => scaleBand(band, factor)),
   });
 }

@@ -181,8 +181,9 @@ function readYarns(fields: Fields): ReadonlyMap<string, Yarn | undefined> {
   const yarns = new Map<string, Yarn | undefined>();
   for (const [role, value] of entries) {
     const path = group.pathOf(role);
-    const named = ROLE.test(role);
-    if (!named) fields.findings.reject('E_ENUM', path, 'A yarn role begins with a letter and goes on with letters, figures or hyphens, 40 at most.');
+    const named = ROLE.test(role) && !(role in Object.prototype);
+    if (role in Object.prototype) fields.findings.reject('E_ENUM', path, `“${role}” cannot name a yarn role. Choose another word.`);
+    else if (!named) fields.findings.reject('E_ENUM', path, 'A yarn role begins with a letter and goes on with letters, figures or hyphens, 40 at most.');
     yarns.set(role, named ? readYarn(Fields.of(value, path, 'Yarn', fields.findings)) : undefined);
   }
   return yarns;

@@ -2,9 +2,9 @@
  * One list to shop by for several pieces: the same yarn is added up before it is rounded
  * to balls, and what can be used again (rods, cards) is asked for once.
  */
-import type { Piece, Yarn } from '#core/craft/piece.ts';
+import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import type { Plan, WarpPlan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan, WarpPlan } from '#core/craft/plan-types.ts';
 import { ballsFor } from '#core/craft/purchase.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { below, Findings } from '#core/craft/reading/findings.ts';
@@ -59,8 +59,8 @@ export interface PieceToShop {
 
 interface Planned {
   readonly name: string;
-  readonly piece: Piece;
-  readonly plan: Plan;
+  readonly piece: FrameLoomPiece;
+  readonly plan: FrameLoomPlan;
 }
 
 const MOST_PIECES = 50;
@@ -157,8 +157,14 @@ function planOne(value: unknown, path: string, findings: Findings, problems: Pro
   const name = fields.text('name', { name: 'Name of the piece', maxLength: 200 });
   const piece = fields.take('piece');
   fields.end();
-  const planned = planPiece(piece, findings.units);
-  if (planned.ok) return { name, piece: piece as Piece, plan: planned.value };
+  // Only what is woven is merged as yet; the cords of other crafts are cut one by one.
+  const craft = typeof piece === 'object' && piece !== null ? Reflect.get(piece, 'craft') as unknown : undefined;
+  if (craft !== undefined && craft !== 'frame-loom') {
+    problems.push({ code: 'E_ENUM', path: `${path}/piece/craft`, message: 'Only woven pieces can be put on one list.' });
+    return undefined;
+  }
+  const planned = planPiece(piece as FrameLoomPiece, findings.units);
+  if (planned.ok) return { name, piece: piece as FrameLoomPiece, plan: planned.value };
   problems.push(...planned.problems.map((problem) => ({ ...problem, path: `${path}/piece${problem.path}` })));
   return undefined;
 }

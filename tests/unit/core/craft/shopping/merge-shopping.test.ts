@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { fitPiece } from '#core/craft/fit.ts';
-import type { Piece } from '#core/craft/piece.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { mergeShopping, type Shopping } from '#core/craft/shopping/merge-shopping.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 import { pieceWith, planOf } from '../a-piece.ts';
@@ -9,7 +9,7 @@ import { pieceWith, planOf } from '../a-piece.ts';
 const pattern = await lowTide();
 const BALL = { metres: 90, grams: 50 };
 const WOOL = { label: 'Fenwool 6/2, Sky', metresPer100g: 180, ball: BALL } as const;
-const SKY: Piece = pieceWith({ yarns: { ground: WOOL } });
+const SKY: FrameLoomPiece = pieceWith({ yarns: { ground: WOOL } });
 const shop = (...pieces: { name: string; piece: unknown }[]): Shopping => {
   const merged = mergeShopping(pieces);
   if (!merged.ok) throw new Error(JSON.stringify(merged.problems));
@@ -29,7 +29,7 @@ describe('yarn', () => {
   });
 
   test('is the same only with label, fineness, colour and ball', () => {
-    const other = (yarn: Piece['yarns'][string]): number => shop({ name: 'A', piece: SKY }, { name: 'B', piece: pieceWith({ yarns: { ground: yarn } }) }).yarns.filter(({ isWarp }) => !isWarp).length;
+    const other = (yarn: FrameLoomPiece['yarns'][string]): number => shop({ name: 'A', piece: SKY }, { name: 'B', piece: pieceWith({ yarns: { ground: yarn } }) }).yarns.filter(({ isWarp }) => !isWarp).length;
     expect(other({ ...WOOL, label: 'FENWOOL 6/2, sky ' })).toBe(1);
     expect(other({ ...WOOL, label: 'Fenwool 6/2, Mud' })).toBe(2);
     expect(other({ ...WOOL, metresPer100g: 170 })).toBe(2);
