@@ -1,11 +1,13 @@
 /** Amounts of one weft yarn: length, mass, balls, and how far a filled shuttle goes. */
 import { countOf, lengthOf, massOf, type HowReckoned, type Reckoned } from '#core/craft/amounts/amount-types.ts';
 import { beatTrust, type PlannedPiece } from '#core/craft/amounts/fixed-amounts.ts';
+import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { settingsOf } from '#core/craft/frame-loom/settings.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import type { YarnPlan } from '#core/craft/plan-types.ts';
 import { techniqueOf } from '#core/craft/techniques/registry.ts';
 import { leastTrust, type Trust } from '#core/craft/trust.ts';
+import { threadOf } from '#core/craft/yarn/thread.ts';
 
 export interface PlannedYarn extends PlannedPiece {
   readonly role: string;
@@ -22,9 +24,9 @@ export function plannedYarn({ piece, plan }: PlannedPiece, role: string): Planne
 /** What the yarn is called in lists: its label, or its role. */
 const nameOf = ({ yarn, role }: PlannedYarn): string => yarn.label ?? role;
 
-/** Wraps that were counted beat the rule for how thick a yarn lies free. */
+/** What was measured beats the rule for how thick a yarn lies free, and the rule its class. */
 export function loftTrust(yarn: Yarn): Trust {
-  return yarn.wrapsPerInch === undefined ? 'formula' : 'measured';
+  return threadOf(yarn, ASHENHURST_K.weft).trust.loft;
 }
 
 function lengthTrust({ piece, yarn, role }: PlannedYarn): Trust {

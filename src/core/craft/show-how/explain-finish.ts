@@ -4,7 +4,7 @@ import { workOf } from '#core/craft/frame-loom/add-up.ts';
 import { HANGING, PACE, SPACER_CARD_EXTRA_MM, TIE_MM } from '#core/craft/defaults.ts';
 import { cordSpan, cordTension } from '#core/craft/hanging.ts';
 import type { Dowel } from '#core/craft/piece.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { DressedWorkings, ToldBand } from '#core/craft/show-how/bands/band.ts';
 import type { NotedBand } from '#core/craft/show-how/explain-bands.ts';
 import { asWound } from '#core/craft/show-how/explain-warp.ts';
@@ -15,7 +15,7 @@ import { hoursByWork, secondsPerRow } from '#core/craft/time.ts';
 
 const rule = (symbol: string, name: string, value: number, unit: WorkingUnit, source: Standing): WorkingInput => standing({ symbol, name, value, unit }, source, WEIGHS_NOTHING);
 
-function noteCard({ book, warp }: DressedWorkings, { cut: { spacerCard } }: Plan): void {
+function noteCard({ book, warp }: DressedWorkings, { cut: { spacerCard } }: FrameLoomPlan): void {
   const extra = rule('x', 'card beyond the warp', SPACER_CARD_EXTRA_MM, 'mm', DEFAULTS.spacerExtra);
   book.note({ id: 'cut.spacerCard.widthMm', name: 'width of the spacer card', formula: 'w + x', inputs: [from('w', warp.woundWidth), extra], value: spacerCard.widthMm, unit: 'mm', ...RULES.arithmetic });
   book.note({ id: 'cut.spacerCard.heightMm', name: 'height of the spacer card', formula: 'b', inputs: [from('b', warp.bottom)], value: spacerCard.heightMm, unit: 'mm', ...RULES.loom });
@@ -33,7 +33,7 @@ function noteLashing({ book, piece, warp }: DressedWorkings, dowel: Dowel, lashi
   book.note({ id: 'cut.lashingMm', name: 'yarn that lashes the cloth to its dowel', formula: '(ceil(W / q - 1e-9) + 1) * hypot(pi * (d + y), q) + 2 * t', inputs, value: lashingMm, unit: 'mm', ...RULES.stitchPath });
 }
 
-function noteHanging(on: DressedWorkings, { cut, massG }: Plan, mass: Working): void {
+function noteHanging(on: DressedWorkings, { cut, massG }: FrameLoomPlan, mass: Working): void {
   const { book, piece } = on;
   const { dowel } = piece.edges;
   if (dowel === undefined || cut.dowel === undefined || cut.cordMm === undefined) return;
@@ -73,7 +73,7 @@ function noteWork({ book }: DressedWorkings, kind: WorkKind, bands: readonly Not
   return book.note({ id: `work.${kind}`, name: WORK_WORDS[kind], formula: sumOf(inputs), inputs, value, unit: 'count', ...RULES.arithmetic });
 }
 
-function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: Plan): void {
+function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan): void {
   const { book, warp, piece } = on;
   const work = workOf(woven, piece);
   const hours = hoursByWork(work);
@@ -100,7 +100,7 @@ function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: read
   }
 }
 
-export function noteFinish(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: Plan, masses: readonly Working[]): void {
+export function noteFinish(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan, masses: readonly Working[]): void {
   const inputs = masses.map((mass, at) => from(`m${String(at)}`, mass));
   const mass = on.book.note({ id: 'massG', name: 'mass of the finished piece', formula: sumOf(inputs), inputs, value: plan.massG, unit: 'g', ...RULES.arithmetic });
   on.book.note({ id: 'cut.fixingHoldsG', name: 'what the fixing in the wall must hold', formula: 'k * m', inputs: [rule('k', 'times the piece', HANGING.fixingFactor, 'ratio', DEFAULTS.fixing), from('m', mass)], value: plan.cut.fixingHoldsG, unit: 'g', ...RULES.arithmetic });

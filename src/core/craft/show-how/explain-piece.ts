@@ -1,7 +1,7 @@
 /** The workings of a whole piece, in the order in which one number needs the other. */
 import { addUp, mainWeft, weaveBands } from '#core/craft/frame-loom/add-up.ts';
 import { putOnLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
-import type { Plan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { noteBands, type NotedBand } from '#core/craft/show-how/explain-bands.ts';
 import type { DressedWorkings } from '#core/craft/show-how/bands/band.ts';
@@ -14,7 +14,7 @@ import { pickKey } from '#core/craft/techniques/technique.ts';
 import { RULES } from '#core/craft/show-how/sources.ts';
 
 /** Rows of the yarn most picks are woven with, before rounding: of tabby as they come out, of other bands as they are given. */
-function noteRawPicks({ book, piece, weft }: DressedWorkings, plan: Omit<Plan, 'warnings'>, bands: readonly NotedBand[]): void {
+function noteRawPicks({ book, piece, weft }: DressedWorkings, plan: Omit<FrameLoomPlan, 'warnings'>, bands: readonly NotedBand[]): void {
   const raw = new Map(book.workings.map((working) => [working.id, working]));
   const woven = weaveBands(piece).filter((band) => band.woven.picks?.key === weft.main);
   const inputs = woven.flatMap(({ index }) => {

@@ -2,7 +2,7 @@
 import type { WovenBand } from '#core/craft/frame-loom/add-up.ts';
 import { loadsFor, mainRow, strandsOnShuttle } from '#core/craft/frame-loom/count-yarn.ts';
 import type { Yarn } from '#core/craft/piece.ts';
-import type { Plan, WarpPlan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan, WarpPlan } from '#core/craft/plan-types.ts';
 import { combinedUncertainty, CUT_STRANDS_MARGIN, marginFor, UNCERTAINTIES, type Uncertainties } from '#core/craft/purchase.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import type { DressedWorkings, ToldUse } from '#core/craft/show-how/bands/band.ts';
@@ -49,7 +49,7 @@ const KIND_WORDS: Readonly<Record<ToldUse['kind'], string>> = {
 };
 
 /** Loads to fill, and how far one goes. Answers the working of those that begin and end inside the cloth. */
-function noteLoads(on: DressedWorkings, role: string, uses: readonly PlacedUse[], woven: readonly WovenBand[], plan: Plan): Working {
+function noteLoads(on: DressedWorkings, role: string, uses: readonly PlacedUse[], woven: readonly WovenBand[], plan: FrameLoomPlan): Working {
   const { book } = on;
   const load = setting(on, 'l', 'loadMm', WEIGHS_NOTHING);
   const own = woven.flatMap((band) => band.woven.uses.filter((use) => use.role === role));
@@ -119,7 +119,7 @@ function noteBought({ book }: DressedWorkings, { id, path, yarn, net, tex, margi
   return mass('massG', 'mass of the yarn in the piece', net, plan.massG);
 }
 
-function noteYarn(on: DressedWorkings, role: string, yarn: Yarn, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: Plan): Working {
+function noteYarn(on: DressedWorkings, role: string, yarn: Yarn, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan): Working {
   const uses = bands.flatMap(({ index, uses: own }) => own.filter((use) => use.role === role).map((use) => ({ ...use, index })));
   const own = plan.yarns[role];
   if (own === undefined) throw new Error(`no plan of the yarn ${role}`);
@@ -145,7 +145,7 @@ function noteYarn(on: DressedWorkings, role: string, yarn: Yarn, bands: readonly
 }
 
 /** Warp and every yarn; answers the workings of their masses in the piece. */
-export function noteYarns(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: Plan): readonly Working[] {
+export function noteYarns(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan): readonly Working[] {
   const { warp, piece } = on;
   const masses = [noteBought(on, {
     id: 'warp', path: '/warp/yarn', yarn: piece.warp.yarn, net: warp.net, tex: warp.thread.tex, margin: setting(on, 'M', 'marginWarp', WEIGHS_NOTHING), plan: plan.warp,
