@@ -4,8 +4,9 @@ import { NEUTRAL, mix, shade, yarnColour } from '#core/craft/cloth/colour.ts';
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import type { Band, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
 import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
+import { strandsInRow } from '#core/craft/techniques/tabby.ts';
 import { placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
-import { threadOf } from '#core/craft/yarn/thread.ts';
+import { threadOf, withStrands } from '#core/craft/yarn/thread.ts';
 
 /** Warp that names no colour: undyed cotton. */
 const BARE_WARP = '#d8d2c1';
@@ -55,9 +56,12 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: FrameLoomPi
     case 'tabby': {
       const picks = planned.picks ?? Math.max(1, Math.round(planned.heightMm / plan.weft.pickSpacingMm));
       const pickSpacingMm = planned.heightMm / picks;
-      const grid = { spacingMm: plan.ends.spacingMm, pickSpacingMm, ends: plan.ends.working, rows: picks, widthMm: piece.size.widthMm };
+      const own = piece.yarns[band.yarn];
+      const strands = strandsInRow(band) ?? own?.strands;
+      const together = band.basket === true ? 2 : 1;
+      const grid = { spacingMm: plan.ends.spacingMm * together, pickSpacingMm, ends: Math.floor(plan.ends.working / together), rows: picks, widthMm: piece.size.widthMm };
       const shapes = (band.shapes ?? []).map((shape) => ({ ...roleOf(shape.yarn, piece), spans: spansOf(shape, grid) }));
-      return { ...base, technique: 'tabby', picks, cover: coverOf(piece.yarns[band.yarn], pickSpacingMm), shapes };
+      return { ...base, technique: 'tabby', picks, cover: coverOf(own, strands, pickSpacingMm), shapes, ...(together === 2 && { together }), ...(strands !== undefined && { strands }) };
     }
     case 'soumak':
       return {
@@ -102,9 +106,9 @@ function groundOf(index: number, piece: FrameLoomPiece): string {
 }
 
 /** How far the weft hides the warp: from the thickness of the yarn as it lies free, against the room of a row. */
-function coverOf(yarn: Yarn | undefined, pickSpacingMm: number): number {
+function coverOf(yarn: Yarn | undefined, strands: number | undefined, pickSpacingMm: number): number {
   if (yarn === undefined || !(pickSpacingMm > 0)) return UNKNOWN_COVER;
-  return Math.max(0, Math.min(1, (threadOf(yarn, ASHENHURST_K.weft).loftMm / pickSpacingMm - 0.6) / 0.6));
+  return Math.max(0, Math.min(1, (withStrands(threadOf(yarn, ASHENHURST_K.weft), strands ?? 1).loftMm / pickSpacingMm - 0.6) / 0.6));
 }
 
 /** The ends a shape takes in each pick, as its yarn was counted. */

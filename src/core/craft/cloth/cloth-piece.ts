@@ -78,6 +78,10 @@ export interface TabbyBand extends BandBase {
   /** How much of the warp the weft hides: 0 warp and weft alike, 1 weft-faced. */
   readonly cover: number;
   readonly shapes: readonly ClothShape[];
+  /** Basket weave: two ends are one here, and count once. */
+  readonly together?: 2;
+  /** Threads that lie side by side in a row; 1 when missing. */
+  readonly strands?: number;
 }
 
 /** One colour area laid over a tabby ground. Rows are picks of the band, ends count from the left selvedge. */

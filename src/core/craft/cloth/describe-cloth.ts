@@ -21,7 +21,7 @@ function bandWords(band: ClothBand, units: Units): string {
   const high = length(band.heightMm, units);
   switch (band.technique) {
     case 'tabby':
-      return band.shapes.length === 0 ? `${high} of tabby in ${band.yarn}` : `${high} of ${shapesWord(band)} in ${list(yarnsOf(band))}`;
+      return band.shapes.length === 0 ? `${high} of ${weaveWords(band)} in ${band.yarn}` : `${high} of ${shapesWord(band)} in ${list(yarnsOf(band))}`;
     case 'soumak':
       return `${counted(band.rows, 'row')} of soumak in ${band.yarn}`;
     case 'rya':
@@ -37,6 +37,11 @@ function bandWords(band: ClothBand, units: Units): string {
     case 'heading':
       return 'a heading';
   }
+}
+
+function weaveWords({ together, strands = 1 }: TabbyBand): string {
+  if (together === 2) return 'basket weave';
+  return strands === 2 ? 'tabby with a doubled weft' : 'tabby';
 }
 
 /** A triangle is a wedge at the loom; anything else is called a shape. */

@@ -37,6 +37,12 @@ export function rowsOver(count: number, pitch: number, top: number, weave: Weave
   return Array.from({ length: count }, (_, index) => ({ y: top + (index + 0.5) * pitch, row: rowOnScreen(index, count, weave), x0: 0, x1: weave.width }));
 }
 
+/** Each row as so many threads side by side, which go over and under together. */
+export function sideBySide(rows: readonly PickRow[], pitch: number, threads: number): readonly PickRow[] {
+  if (threads === 1) return rows;
+  return rows.flatMap((row) => Array.from({ length: threads }, (_, at): PickRow => ({ ...row, y: row.y + ((at + 0.5) / threads - 0.5) * pitch })));
+}
+
 /**
  * @param pitch pixels from row to row
  * @param cover how much of the warp the weft hides, 0..1

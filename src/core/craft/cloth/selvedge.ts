@@ -34,7 +34,7 @@ function turnsOf(rows: readonly PickRow[], pitch: number, weave: Weave): Turn[] 
     const own = rows.filter((row) => (side === 'left' ? touchesLeft(row) : touchesRight(row, weave)));
     return own.flatMap((row, index): Turn[] => {
       const next = own[index + 1];
-      if (next === undefined || next.y - row.y > pitch * 1.5) return [];
+      if (next === undefined || next.row === row.row || next.y - row.y > pitch * 1.5) return [];
       return turnSide(Math.min(row.row, next.row), weave) === side ? [{ side, y: row.y, nextY: next.y }] : [];
     });
   });

@@ -74,10 +74,14 @@ function read(fields: Fields): TabbyBand {
   };
 }
 
+/** Strands in a row of this band, where it does not leave that to each yarn. */
+export function strandsInRow({ strands, basket }: Pick<TabbyBand, 'strands' | 'basket'>): number | undefined {
+  return strands ?? (basket === true ? BASKET_STRANDS : undefined);
+}
+
 /** How a yarn of this band, the ground or a shape's, lies in its rows. */
-export function pickIn({ strands, basket }: TabbyBand, role: string): PickOf {
-  const together = strands ?? (basket === true ? BASKET_STRANDS : undefined);
-  return { role, ...present({ strands: together }), ...(basket === true ? { pairs: true as const } : {}) };
+export function pickIn(band: TabbyBand, role: string): PickOf {
+  return { role, ...present({ strands: strandsInRow(band) }), ...(band.basket === true ? { pairs: true as const } : {}) };
 }
 
 function gridOf(band: TabbyBand, heightMm: number, loom: DressedLoom): BandGrid {

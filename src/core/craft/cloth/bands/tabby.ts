@@ -4,23 +4,41 @@ import { shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds, strokeEnds } from '#core/craft/cloth/ends.ts';
 import { box, num } from '#core/craft/cloth/markup.ts';
 import { spansByRow } from '#core/craft/cloth/spans.ts';
-import { drawPicks, rowsOver, type PickRow } from '#core/craft/cloth/picks.ts';
+import { drawPicks, rowsOver, sideBySide, type PickRow } from '#core/craft/cloth/picks.ts';
 import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
 import { drawnRows, rowOnScreen, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTabby(band: TabbyBand, height: number, weave: Weave): string {
   const count = drawnRows(band.picks, height, weave.minPick);
   const pitch = height / count;
-  const ground = drawGround(band.colour, count, height, band.cover, weave);
-  const shapes = band.shapes.map((shape) => drawShape(shape, shapeRows(shape, band, count, pitch, weave), pitch, band.cover, weave));
+  const met = metBy(band, weave);
+  const threads = threadsDrawn(band, pitch, weave);
+  const ground = drawGround(band.colour, count, height, band.cover, weave, { met, threads });
+  const shapes = band.shapes.map((shape) => {
+    const rows = sideBySide(shapeRows(shape, band, count, pitch, met), pitch, threads);
+    return drawShape(shape, rows, pitch / threads, band.cover, weave, met);
+  });
   return ground + shapes.join('');
 }
 
+/** The warp as this band's weft meets it: in basket weave two ends are one. */
+function metBy(band: TabbyBand, weave: Weave): Weave {
+  return band.together === 2 ? { ...weave, end: weave.end * 2, ends: Math.ceil(weave.ends / 2) } : weave;
+}
+
+/** More threads in a row than this are a bundle, and are seen as one. */
+const MOST_THREADS = 3;
+
+/** The threads of a row, where there is room to see each of them. */
+function threadsDrawn({ strands = 1 }: TabbyBand, pitch: number, weave: Weave): number {
+  return strands <= MOST_THREADS && pitch / strands >= weave.minPick ? strands : 1;
+}
+
 /** Plain tabby in one colour: what stands under shapes and pile alike. */
-export function drawGround(colour: string, count: number, height: number, cover: number, weave: Weave): string {
-  const pitch = height / count;
-  const rows = rowsOver(count, pitch, 0, weave);
-  const picks = drawPicks(rows, pitch, colour, cover, weave);
+export function drawGround(colour: string, count: number, height: number, cover: number, weave: Weave, { met, threads } = { met: weave, threads: 1 }): string {
+  const pitch = height / count / threads;
+  const rows = sideBySide(rowsOver(count, pitch * threads, 0, met), pitch * threads, threads);
+  const picks = drawPicks(rows, pitch, colour, cover, met);
   return (
     box(0, 0, weave.width, height, shade(colour, 0.6)) +
     picks.under +
@@ -57,11 +75,11 @@ function snap(end: number, weave: Weave): number {
   return Math.max(0, Math.min(weave.width, pairs * 2 * weave.end));
 }
 
-function drawShape(shape: ClothShape, rows: readonly PickRow[], pitch: number, cover: number, weave: Weave): string {
+function drawShape(shape: ClothShape, rows: readonly PickRow[], pitch: number, cover: number, weave: Weave, met: Weave): string {
   if (rows.length === 0) return '';
   const { paths } = weave;
   const stretch = rows.map((row) => `M${num(row.x0)} ${num(row.y)}H${num(row.x1)}`).join('');
-  const picks = drawPicks(rows, pitch, shape.colour, cover, weave);
+  const picks = drawPicks(rows, pitch, shape.colour, cover, met);
   return (
     paths.stroke(stretch, shade(shape.colour, 0.6), pitch + 0.4) +
     picks.under +

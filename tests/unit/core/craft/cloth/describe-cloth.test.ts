@@ -24,6 +24,12 @@ describe('a cloth in words', () => {
     expect(describeCloth(wovenPiece({ bands: [horns] }))).toContain('16\u00a0cm of shapes in Slack Water and Dry Sand');
   });
 
+  it('tells basket weave and a doubled weft from plain tabby', () => {
+    const plain = { ...WEDGES, shapes: [] };
+    const words = describeCloth(wovenPiece({ bands: [{ ...plain, together: 2, strands: 2 }, { ...plain, strands: 2 }, plain] }));
+    expect(words).toContain('16\u00a0cm of basket weave in Slack Water, 16\u00a0cm of tabby with a doubled weft in Slack Water, 16\u00a0cm of tabby in Slack Water');
+  });
+
   it('speaks in inches with fractions when asked', () => {
     expect(describeCloth(piece, { units: 'in' })).toContain('15\u20093/4\u00a0in wide');
   });

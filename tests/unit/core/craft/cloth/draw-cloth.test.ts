@@ -111,6 +111,21 @@ describe('a shape of several areas in a row', () => {
   });
 });
 
+describe('basket weave', () => {
+  const view: ClothView = { id: 'a', as: 'swatch', width: 400, height: 120 };
+  const band = { ...WEDGES, shapes: [], picks: 6, heightMm: 60 };
+  const repeats = (svg: string): Set<number> => new Set([...svg.matchAll(/stroke-dasharray="([\d.]+) ([\d.]+)"[^>]*stroke-linecap="round"/g)].map(([, on, off]) => Math.round(Number(on) + Number(off))));
+
+  it('goes over two ends and under two, with two threads in every row', () => {
+    const plain = drawCloth(wovenPiece({ ends: 20, bands: [band] }), view);
+    const basket = drawCloth(wovenPiece({ ends: 20, bands: [{ ...band, together: 2, strands: 2 }] }), view);
+    const [once] = repeats(plain);
+    expect([...repeats(basket)]).toEqual([2 * (once ?? 0)]);
+    const rows = (svg: string): number => (/<path id="a-0" d="([^"]+)"/.exec(svg)?.[1] ?? '').split('M').length - 1;
+    expect(rows(basket)).toBe(2 * rows(plain));
+  });
+});
+
 describe('the ways up of a cloth', () => {
   const hanging: ClothView = { id: 'a', as: 'hanging', width: 400 };
   const px = (400 - 24) / 400;
