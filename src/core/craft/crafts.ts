@@ -1,11 +1,13 @@
 /** Every craft a piece can be made in. A further one is a further line here and its folder beside this file. */
 import type { Craft, MadeOf } from '#core/craft/craft.ts';
+import { DYEING } from '#core/craft/dyeing/craft.ts';
 import { FRAME_LOOM } from '#core/craft/frame-loom/craft.ts';
 import { MACRAME } from '#core/craft/macrame/craft.ts';
 
 export const CRAFTS = {
   'frame-loom': FRAME_LOOM,
   macrame: MACRAME,
+  dyeing: DYEING,
 } as const;
 
 export type CraftName = keyof typeof CRAFTS;
