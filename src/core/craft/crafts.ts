@@ -3,11 +3,13 @@ import type { Craft, MadeOf } from '#core/craft/craft.ts';
 import { DYEING } from '#core/craft/dyeing/craft.ts';
 import { FRAME_LOOM } from '#core/craft/frame-loom/craft.ts';
 import { MACRAME } from '#core/craft/macrame/craft.ts';
+import { RIGID_HEDDLE } from '#core/craft/rigid-heddle/craft.ts';
 
 export const CRAFTS = {
   'frame-loom': FRAME_LOOM,
   macrame: MACRAME,
   dyeing: DYEING,
+  'rigid-heddle': RIGID_HEDDLE,
 } as const;
 
 export type CraftName = keyof typeof CRAFTS;
