@@ -70,7 +70,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/series': [{ at: '/series', answers: EVERYBODY }],
   '/series/[slug]': [
     { at: '/series/low-tide', answers: EVERYBODY },
-    { at: '/series/three-knotted-cords', answers: '404 404 404 200 404 404 404' },
+    { at: '/series/three-knotted-cords', answers: EVERYBODY },
     { at: '/series/nothing', answers: '404' },
   ],
   '/series/[slug]/[part]': [
@@ -78,7 +78,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
     { at: '/series/low-tide/2', answers: '402 402 200 402 200 200 402' },
     { at: '/series/low-tide/3', answers: '402 402 200 402 200 200 402' },
     { at: '/series/low-tide/8', answers: '404' },
-    { at: '/series/three-knotted-cords/1', answers: '404 404 404 200 404 404 404' },
+    { at: '/series/three-knotted-cords/1', answers: EVERYBODY },
   ],
   '/series/[slug]/[part]/loomside': [{ at: '/series/low-tide/1/loomside', answers: EVERYBODY }, { at: '/series/low-tide/2/loomside', answers: '303 303 200 303 200 200 303' }],
   '/series/[slug]/gather': [{ at: '/series/low-tide/gather', answers: EVERYBODY }],

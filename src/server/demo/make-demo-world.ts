@@ -27,7 +27,9 @@ export async function makeDemoWorld(password: string, say: (line: string) => voi
   say('people and workrooms');
   const ilse = person('ilse@saltmarsh.example');
   const lowTide = await bringIn(ilse, saltmarsh, 'low-tide');
-  await bringIn(person('teodor@cordage.example'), cordage, 'three-knotted-cords');
+  const teodor = person('teodor@cordage.example');
+  const cords = await bringIn(teodor, cordage, 'three-knotted-cords');
+  await publishSeries(await actingAs(teodor), cords.slug);
   say('series');
   await drawVideos(services().media, lowTide, ilse.id);
   say('films');

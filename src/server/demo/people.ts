@@ -12,7 +12,7 @@ export interface DemoPerson {
 export const DEMO_PEOPLE: readonly DemoPerson[] = [
   { address: 'ilse@saltmarsh.example', name: 'Ilse Marrow', role: 'teacher of Low Tide' },
   { address: 'wren@saltmarsh.example', name: 'Wren Okafor', role: 'helps Ilse at the bench' },
-  { address: 'teodor@cordage.example', name: 'Teodor Brandl', role: 'teacher, his series still a draft' },
+  { address: 'teodor@cordage.example', name: 'Teodor Brandl', role: 'teacher of Three Knotted Cords' },
   { address: 'maud@weavers.example', name: 'Maud Ellery', role: 'student in part 2, her photo waits' },
   { address: 'jonas@weavers.example', name: 'Jonas Pike', role: 'student, nothing done yet' },
   { address: 'amara@weavers.example', name: 'Amara Voss', role: 'has no seat yet' },

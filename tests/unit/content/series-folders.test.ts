@@ -6,6 +6,8 @@ import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { SeriesFile } from '#contracts/series-folder.ts';
 import { amountOf } from '#core/craft/amounts.ts';
 import { fitPiece } from '#core/craft/fit.ts';
+import type { MacramePiece } from '#core/craft/macrame/piece.ts';
+import { planPiece } from '#core/craft/plan.ts';
 import { parseLessonText, type LessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { plainWords } from '#core/lesson-text/plain-text.ts';
 import type { Block, Component, LessonNode } from '#core/lesson-text/tree.ts';
@@ -187,5 +189,28 @@ describe('Low Tide', () => {
       expect(link).toMatch(/^\/handbook\/[a-z-]+$/u);
       expect(existsSync(new URL(`${link.slice(1)}.mdx`, content)), link).toBe(true);
     }
+  });
+});
+
+describe('Three Knotted Cords', () => {
+  const piece = JSON.parse(read('three-knotted-cords', 'piece.json')) as MacramePiece;
+  const planned = planPiece(piece);
+  const { lessons } = seriesOf('three-knotted-cords');
+
+  test('has a piece that can be knotted without a warning', () => {
+    expect(planned.ok ? planned.warnings : planned.problems).toEqual([]);
+  });
+
+  test('every amount its texts and lists ask for is told by the plan', () => {
+    if (!planned.ok) throw new Error('it can be knotted');
+    const asked = lessons.flatMap(({ file, gathering }) => [...lessonOf('three-knotted-cords', file).amounts, ...gathering.flatMap(({ amount }) => amount ?? [])]);
+    expect(asked.length).toBeGreaterThan(15);
+    for (const key of asked) expect(amountOf(key, piece, planned.value).ok, key).toBe(true);
+  });
+
+  test.each(lessons.map(({ file }) => file))('%s reads without a problem or a warning, with a caution that names who to ask', (file) => {
+    const lesson = lessonOf('three-knotted-cords', file);
+    expect(lesson.warnings).toEqual([]);
+    expect(read('three-knotted-cords', file)).toMatch(/<Caution[^]*qualified person|<Caution[^]*ask a qualified/u);
   });
 });

@@ -180,10 +180,13 @@ function lay(piece: WovenPiece, view: ClothView): Picture {
   return { width: view.width, height, body, defs: defsOf(piece, weave, bands.clip) };
 }
 
+/** A long hanging is drawn smaller, so that its picture stays about twice as high as wide. */
+const HUNG_TALLEST = 2.1;
+
 /** Knotted work hangs in every view: it never stands in a frame. */
 function hangKnotted(piece: HungPiece, view: ClothView): Picture {
   const inset = Math.max(2, view.width * 0.03);
-  const scale = view.pxPerMm ?? (view.width - 2 * inset) / piece.widthMm;
+  const scale = view.pxPerMm ?? Math.min((view.width - 2 * inset) / piece.widthMm, (view.width * HUNG_TALLEST) / piece.heightMm);
   return { width: view.width, ...drawHung(piece, { id: view.id, width: view.width, scale }) };
 }
 
