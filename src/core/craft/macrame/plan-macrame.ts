@@ -16,7 +16,7 @@ import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
 import { massOf } from '#core/craft/yarn/thread.ts';
 
 /** Common practice, no source: knots an hour of a steady hand, cords cut and hung, and drawing level at the end. */
-const KNOTTING_PACE = { knotsPerHour: 120, hitchesPerHour: 150, cordsPerHour: 40, gatheringHours: 0.15, finishingHours: 0.5 } as const;
+const KNOTTING_PACE = { knotsPerHour: 60, hitchesPerHour: 90, cordsPerHour: 20, gatheringHours: 0.15, finishingHours: 0.5 } as const;
 /** Common practice: tails of a gathering cord, each. */
 const GATHERING_TAIL_MM = 100;
 /** The rule of practice and the sum of the knots may differ by this factor before it is worth a word. */
