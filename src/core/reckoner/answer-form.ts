@@ -76,7 +76,7 @@ export function answerForm(form: ReckonerForm): ReckonerAnswer {
   const rya = readTypedRya(reader);
   const cloth: Cloth | undefined = loom && { yarn: soundYarn ?? ANY_YARN, loom, rows: rows ?? ANY_ROWS };
   const plain = cloth && plainCloth(cloth, reader);
-  const sett: SettSection = orFailed(() => answerSett(loom, soundYarn, reader));
+  const sett: SettSection = orFailed(() => answerSett(loom, soundYarn, plain, reader));
   const { dressed } = sett;
   const ground: ShapeGround | undefined = cloth && dressed && { dressed, pickSpacingMm: pickSpacing(cloth.rows.beat, threadOf(cloth.yarn, ASHENHURST_K.weft).compressedMm) };
   const sections = tellOnce({

@@ -1,6 +1,8 @@
 /** What the reckoner's page answers: lines of amounts, each with the way it was got. */
 import type { Input } from '#core/craft/amounts/amount-types.ts';
+import type { Working } from '#core/craft/show-how/working.ts';
 import type { Trust } from '#core/craft/trust.ts';
+import type { Outcome } from '#core/outcome.ts';
 import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
 
 export interface AnswerLine {
@@ -9,6 +11,8 @@ export interface AnswerLine {
   /** In words and signs. */
   readonly how: string;
   readonly trust: Trust;
+  /** Id of its working, where the part has one. */
+  readonly step?: string;
   /** Told first and largest. */
   readonly loud?: true;
 }
@@ -22,11 +26,25 @@ export interface Section {
   readonly notes: readonly string[];
   /** Fields it cannot answer without. */
   readonly needs: readonly ReckonerField[];
+  /** Every step of the reckoning, for who asks to see it. */
+  readonly workings?: () => readonly Working[];
   /** Something in it broke that never should. */
   readonly failed?: true;
 }
 
 export const NO_ANSWER: Omit<Section, 'needs'> = { lines: [], notes: [] };
 
-/** Length, weight and balls of a yarn to have in hand. */
+/** The line as one of those that matter most. */
 export const loud = (line: AnswerLine): AnswerLine => ({ ...line, loud: true });
+
+/** The line with the working that gave it. */
+export const stepped = (step: string, line: AnswerLine): AnswerLine => ({ ...line, step });
+
+/** The line with its working's id, by its label. */
+export function named(line: AnswerLine, steps: Readonly<Record<string, string>>): AnswerLine {
+  const step = steps[line.label];
+  return step === undefined ? line : stepped(step, line);
+}
+
+/** What could be written down of a reckoning; nothing where it could not be carried out. */
+export const written = (outcome: Outcome<readonly Working[]>): readonly Working[] => (outcome.ok ? outcome.value : []);

@@ -1,7 +1,7 @@
 /** A whole small hanging: hem, fringe if wanted, one plain stretch, hem. */
 import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
-import { amountLine, yarnInHand } from '#core/reckoner/answer-cloth.ts';
+import { amountLine, workingsOf, yarnInHand } from '#core/reckoner/answer-cloth.ts';
 import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { ryaBand, type TypedRya } from '#core/reckoner/answer-rya.ts';
 import { RYA_KEYS } from '#core/reckoner/field-of-path.ts';
@@ -63,5 +63,5 @@ export function answerPiece(cloth: Cloth | undefined, rya: TypedRya | undefined,
     ...(diameterMm === undefined ? {} : { dowel: { diameterMm } }),
   }, reader, RYA_KEYS);
   if (made === undefined || !reader.isSound(...needs)) return none;
-  return { lines: linesOf(made), notes: made.notes, needs, made };
+  return { lines: linesOf(made), notes: made.notes, needs, made, workings: workingsOf(made, reader.units) };
 }

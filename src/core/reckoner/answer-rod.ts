@@ -45,7 +45,7 @@ export function answerRod(reader: FormReader): Section {
       loud({ label: 'The cord pulls with', value: { kind: 'number', ...pull }, how: 'half the weight on each side ÷ the sine of its slope: the flatter, the harder', trust: 'formula' }),
       { label: 'Least thickness', value: lengthOf(leastMm, 'fine-least'), how: 'a round rod of soft wood, evenly loaded, that sags by no more than a 360th', trust: 'formula' },
       { label: 'Between the knots', value: lengthOf(spanMm, 'size'), how: 'the cord is tied 2 cm from each end', trust: 'formula' },
-      { label: 'The nail or hook must hold', value: massOf(HANGING.fixingFactor * grams), how: 'four times the weight of the piece', trust: 'class' },
+      { label: 'The nail or hook must hold', value: massOf(HANGING.fixingFactor * grams), how: 'four times the weight of the piece', trust: 'practice' },
     ],
     notes: [],
     needs: NEEDS,

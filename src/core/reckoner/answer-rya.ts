@@ -6,8 +6,9 @@ import type { RyaBand, Yarn } from '#core/craft/piece.ts';
 import { ballsFor, withMargin } from '#core/craft/purchase.ts';
 import { reckon } from '#core/craft/reckon.ts';
 import type { RyaAnswer } from '#core/craft/reckoning/reckon-stitches.ts';
+import { explainRya } from '#core/craft/show-how/explain.ts';
 import { massOf as massOfYarn, threadOf } from '#core/craft/yarn/thread.ts';
-import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { loud, NO_ANSWER, named, written, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { RYA_KEYS } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import { SETT_FIELDS, YARN_FIELDS } from '#core/reckoner/read-fields.ts';
@@ -73,15 +74,20 @@ function lines(rya: RyaAnswer, yarn: Yarn, typed: TypedRya): AnswerLine[] {
   ];
 }
 
+const STEPS: Readonly<Record<string, string>> = {
+  'Cut each strand': 'cutMm', Strands: 'strands', 'Winding card': 'cardMm', 'Knots in a row': 'knotsPerRow', 'The knot itself takes': 'wrapMm', 'Thickness of the bundle': 'bundleMm',
+};
+
 export function answerRya(typed: TypedRya | undefined, yarn: Yarn | undefined, dressed: DressedWarp | undefined, reader: FormReader): Section {
   const none = { ...NO_ANSWER, needs: NEEDS };
   if (typed === undefined || dressed === undefined || yarn === undefined || !reader.isSound(...NEEDS)) return none;
   const { strandLoftMm } = threadOf(yarn, ASHENHURST_K.weft);
-  const outcome = reckon({ what: 'rya', ...typed, spacingMm: dressed.ends.spacingMm, warpDiameterMm: dressed.workingDiameterMm, strandLoftMm, ends: dressed.ends.working }, reader.units);
+  const question = { what: 'rya', ...typed, spacingMm: dressed.ends.spacingMm, warpDiameterMm: dressed.workingDiameterMm, strandLoftMm, ends: dressed.ends.working };
+  const outcome = reckon(question, reader.units);
   if (!outcome.ok) {
     for (const { path, message } of outcome.problems) reader.refuse(RYA_KEYS[path.slice(1)] ?? 'leg-ends', message);
     return none;
   }
   if (!('cutMm' in outcome.value) || !reader.isSound(...NEEDS)) return none;
-  return { lines: lines(outcome.value, yarn, typed), notes: [], needs: NEEDS };
+  return { lines: lines(outcome.value, yarn, typed).map((line) => named(line, STEPS)), notes: [], needs: NEEDS, workings: () => written(explainRya(question, reader.units)) };
 }

@@ -10,7 +10,9 @@ import type { Yarn } from '#core/craft/piece.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
 import { adviseSpacing, balancedSett, strandsFor, type SpacingAdvice } from '#core/craft/sett.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
-import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { loud, NO_ANSWER, named, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { workingsOf } from '#core/reckoner/answer-cloth.ts';
+import type { Made } from '#core/reckoner/small-piece.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import { SETT_FIELDS, type TypedLoom } from '#core/reckoner/read-fields.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
@@ -44,7 +46,7 @@ function evenLines({ loom }: TypedLoom): AnswerLine[] {
   const { first, second } = zigzagGaps(NEAR_A_RAIL, pitchMm);
   return [
     { label: 'Gaps near the rails, by turns', value: { kind: 'size', widthMm: first, heightMm: second, use: 'fine' }, how: 'ends meet in pairs at every nail: a tenth of the height from a rail the gaps are a tenth and nine tenths of a nail’s', trust: 'formula' },
-    { label: 'Spacing rows at each edge', value: { kind: 'words', words: `${String(fewest)} to ${String(most)}` }, how: 'twining or scrap yarn that sets the ends even before you weave; only half way up do they stand even by themselves', trust: 'class' },
+    { label: 'Spacing rows at each edge', value: { kind: 'words', words: `${String(fewest)} to ${String(most)}` }, how: 'twining or scrap yarn that sets the ends even before you weave; only half way up do they stand even by themselves', trust: 'practice' },
   ];
 }
 
@@ -84,10 +86,15 @@ function yarnLines({ ends, workingDiameterMm }: DressedWarp, yarn: Yarn, reader:
   ];
 }
 
+const STEPS: Readonly<Record<string, string>> = {
+  'Warp ends': 'ends.count', 'Worked as': 'ends.working', 'From end to end': 'ends.spacingMm', 'Nails above': 'ends.nailsTop', 'Nails below': 'ends.nailsBottom', 'Notches above': 'ends.nailsTop', 'Notches below': 'ends.nailsBottom',
+  'Width on the loom': 'ends.loomWidthMm', 'Width of the warp': 'ends.woundWidthMm', 'Inside width needed': 'loom.insideWidthNeededMm',
+};
+
 const FIELD_OF_PATH: Readonly<Record<string, (typeof SETT_FIELDS)[number]>> = { '/size/widthMm': 'width', '/warp/parity': 'parity' };
 
-/** `yarn` only if it can be used. */
-export function answerSett(typed: TypedLoom | undefined, yarn: Yarn | undefined, reader: FormReader): SettSection {
+/** `yarn` only if it can be used; `plain` is the cloth whose workings tell those of its ends. */
+export function answerSett(typed: TypedLoom | undefined, yarn: Yarn | undefined, plain: Made | undefined, reader: FormReader): SettSection {
   const none = { ...NO_ANSWER, needs: SETT_FIELDS };
   if (typed === undefined || !reader.isSound(...SETT_FIELDS)) return none;
   const settings = settingsOf({ drawIn: typed.drawIn }, 'straight-warp', { picksPerWeftDiameter: 1 });
@@ -101,5 +108,6 @@ export function answerSett(typed: TypedLoom | undefined, yarn: Yarn | undefined,
   }
   const suits = yarn === undefined ? [] : yarnLines(dressed, yarn, reader);
   const offered = yarn === undefined ? {} : { offered: offeredSpacings(typed.loom, dressed.thread, threadOf(yarn, ASHENHURST_K.weft)) };
-  return { lines: [...endLines(dressed, typed), ...suits, ...evenLines(typed)], notes: findings.warnings.map(({ message }) => message), needs: SETT_FIELDS, dressed, ...offered };
+  const workings = plain === undefined ? {} : { workings: workingsOf(plain, reader.units) };
+  return { ...workings, lines: [...endLines(dressed, typed), ...suits, ...evenLines(typed)].map((line) => named(line, STEPS)), notes: findings.warnings.map(({ message }) => message), needs: SETT_FIELDS, dressed, ...offered };
 }

@@ -3,8 +3,9 @@ import { countOf } from '#core/craft/amounts/amount-types.ts';
 import { reckon } from '#core/craft/reckon.ts';
 import type { ShapeAnswer } from '#core/craft/reckoning/reckon-shape.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
+import { explainShape } from '#core/craft/show-how/explain.ts';
 import { slopeAngle } from '#core/craft/shapes.ts';
-import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { loud, NO_ANSWER, stepped, written, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { drawRows, type RowsDrawing } from '#core/reckoner/draw-rows.ts';
 import { SHAPE_KEYS } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
@@ -56,12 +57,12 @@ function area(mm2: number, units: Units): AnswerLine['value'] {
 
 function shapeLines(shape: ShapeAnswer, units: Units): AnswerLine[] {
   return [
-    loud({ label: 'Rows', value: countOf(shape.rows, 'row', 'rows'), how: 'height ÷ room for one row, to the nearest', trust: 'formula' }),
+    stepped('rows', loud({ label: 'Rows', value: countOf(shape.rows, 'row', 'rows'), how: 'height ÷ room for one row, to the nearest', trust: 'formula' })),
     loud({ label: 'First row', value: countOf(shape.widths[0] ?? 0, 'end', 'ends'), how: 'width of the shape in that row ÷ room for one end, to the nearest', trust: 'formula' }),
     loud({ label: 'Widest row', value: countOf(Math.max(0, ...shape.widths), 'end', 'ends'), how: 'the most of all rows', trust: 'formula' }),
-    { label: 'Ends of all rows', value: countOf(shape.endsTotal, 'end', 'ends'), how: 'added up, row by row', trust: 'formula' },
-    { label: 'Area as stepped', value: area(shape.areaMm2, units), how: 'ends of all rows × room for one end × room for one row', trust: 'formula' },
-    { label: 'Area as asked', value: area(shape.trueAreaMm2, units), how: 'of the shape itself', trust: 'formula' },
+    stepped('endsTotal', { label: 'Ends of all rows', value: countOf(shape.endsTotal, 'end', 'ends'), how: 'added up, row by row', trust: 'formula' }),
+    stepped('areaMm2', { label: 'Area as stepped', value: area(shape.areaMm2, units), how: 'ends of all rows × room for one end × room for one row', trust: 'formula' }),
+    stepped('trueAreaMm2', { label: 'Area as asked', value: area(shape.trueAreaMm2, units), how: 'of the shape itself', trust: 'formula' }),
   ];
 }
 
@@ -110,12 +111,13 @@ export function answerShape(ground: ShapeGround | undefined, reader: FormReader)
   if (measures === undefined) return { ...NO_ANSWER, needs };
   const { dressed: { ends }, pickSpacingMm } = ground;
   const symmetric = reader.choice('sides', ['alike', 'freely']) === 'alike';
-  const outcome = reckon({ what: 'shape', shape, ...measures, spacingMm: ends.spacingMm, pickSpacingMm, ends: ends.working, symmetric }, reader.units);
+  const question = { what: 'shape', shape, ...measures, spacingMm: ends.spacingMm, pickSpacingMm, ends: ends.working, symmetric };
+  const outcome = reckon(question, reader.units);
   if (!outcome.ok) {
     for (const { path, message } of outcome.problems) reader.refuse(SHAPE_KEYS[path.slice(1)] ?? 'base', message);
     return { ...NO_ANSWER, needs };
   }
   if (!('widths' in outcome.value) || !reader.isSound(...needs)) return { ...NO_ANSWER, needs };
   const drawing = drawRows(outcome.value.widths, { spacingMm: ends.spacingMm, pickSpacingMm, ends: ends.working, aligned: 'middle' });
-  return { lines: shapeLines(outcome.value, reader.units), notes: [], needs, drawing, runs: runsOf(outcome.value.widths) };
+  return { lines: shapeLines(outcome.value, reader.units), notes: [], needs, drawing, runs: runsOf(outcome.value.widths), workings: () => written(explainShape(question, reader.units)) };
 }

@@ -1,12 +1,13 @@
 /** Ridges of soumak in the yarn of the page, on its ends. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { pickSpacing } from '#core/craft/picks.ts';
+import { explainSoumak } from '#core/craft/show-how/explain.ts';
 import { soumakRatio } from '#core/craft/techniques/soumak.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
-import { yarnInHand } from '#core/reckoner/answer-cloth.ts';
-import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { workingsOf, yarnInHand } from '#core/reckoner/answer-cloth.ts';
+import { loud, NO_ANSWER, stepped, written, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { SOUMAK_KEYS } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import { ROW_FIELDS, SETT_FIELDS, YARN_FIELDS } from '#core/reckoner/read-fields.ts';
@@ -33,18 +34,17 @@ function readBand(reader: FormReader) {
 
 type Band = NonNullable<ReturnType<typeof readBand>>;
 
-function lines(made: Made, band: Band, cloth: Cloth, dressed: DressedWarp): AnswerLine[] {
+function lines(made: Made, band: Band, cloth: Cloth, diameterSumMm: number): AnswerLine[] {
   const { plan } = made;
   const ridge = plan.bands[0];
   if (ridge === undefined) return [];
-  const diameterSumMm = dressed.workingDiameterMm + threadOf(cloth.yarn, ASHENHURST_K.weft).loftMm;
   const loftTrust = cloth.yarn.wrapsPerInch === undefined ? 'formula' : 'measured';
   return [
     ...yarnInHand(made, 'ridge'),
-    loud({ label: 'Stitches in a row', value: { kind: 'count', count: (ridge.stitches ?? 0) / band.rows, one: 'stitch', many: 'stitches' }, how: '(ends − over) ÷ (over − back), whole ones, and the first', trust: 'formula' }),
+    stepped('stitches', loud({ label: 'Stitches in a row', value: { kind: 'count', count: (ridge.stitches ?? 0) / band.rows, one: 'stitch', many: 'stitches' }, how: '(ends − over) ÷ (over − back), whole ones, and the first', trust: 'formula' })),
     { label: 'Yarn of one row', value: lengthOf((ridge.yarnMm['ridge'] ?? 0) / band.rows, 'yarn'), how: 'stitches × yarn of one stitch, and two tails', trust: loftTrust },
-    { label: 'Yarn over width covered', value: { kind: 'number', value: soumakRatio({ ...band, spacingMm: plan.ends.spacingMm, diameterSumMm }), unit: 'times' }, how: 'forward on the face, back behind, and two half turns round the ends', trust: loftTrust },
-    { label: 'Height of the ridges', value: lengthOf(ridge.heightMm, 'fine'), how: 'rows × thickness lying free, and the tabby between', trust: loftTrust },
+    stepped('ratio', { label: 'Yarn over width covered', value: { kind: 'number', value: soumakRatio({ ...band, spacingMm: plan.ends.spacingMm, diameterSumMm }), unit: 'times' }, how: 'forward on the face, back behind, and two half turns round the ends', trust: loftTrust }),
+    stepped('bands.0.heightMm', { label: 'Height of the ridges', value: lengthOf(ridge.heightMm, 'fine'), how: 'rows × thickness lying free, and the tabby between', trust: loftTrust }),
   ];
 }
 
@@ -54,5 +54,13 @@ export function answerSoumak(cloth: Cloth | undefined, dressed: DressedWarp | un
   const making = { bands: [band, { technique: 'tabby', yarn: 'ground', fill: true } as const], yarns: { ridge: { ...cloth.yarn, label: 'Ridge yarn' } }, heightMm: roomFor(band, cloth) };
   const made = makePiece(cloth, making, reader, SOUMAK_KEYS);
   if (made === undefined || !reader.isSound(...NEEDS)) return { ...NO_ANSWER, needs: NEEDS };
-  return { lines: lines(made, band, cloth, dressed), notes: made.notes, needs: NEEDS };
+  const diameterSumMm = dressed.workingDiameterMm + threadOf(cloth.yarn, ASHENHURST_K.weft).loftMm;
+  const { ends } = made.plan;
+  const row = { over: band.over, back: band.back, spacingMm: ends.spacingMm, diameterSumMm, ends: ends.working };
+  return {
+    lines: lines(made, band, cloth, diameterSumMm),
+    notes: made.notes,
+    needs: NEEDS,
+    workings: () => [...written(explainSoumak(row, reader.units)), ...workingsOf(made, reader.units)()],
+  };
 }

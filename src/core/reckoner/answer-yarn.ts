@@ -4,9 +4,10 @@ import type { YarnAnswer } from '#core/craft/reckoning/reckon-yarn.ts';
 import type { Trust } from '#core/craft/trust.ts';
 import type { CountSystem, Yarn } from '#core/craft/piece.ts';
 import { classesByLength, classesByWraps } from '#core/craft/yarn/classes.ts';
+import { explainYarn } from '#core/craft/show-how/explain.ts';
 import { countFromTex } from '#core/craft/yarn/count.ts';
 import { readCount } from '#core/craft/yarn/count-text.ts';
-import { loud, NO_ANSWER, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
+import { loud, NO_ANSWER, named, written, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
 import { fieldOfYarn } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import { YARN_FIELDS } from '#core/reckoner/read-fields.ts';
@@ -80,6 +81,12 @@ function thickness(yarn: YarnAnswer, typed: Yarn): AnswerLine[] {
   ];
 }
 
+const STEPS: Readonly<Record<string, string>> = {
+  Tex: 'tex', 'Metres in 100 g': 'metresPer100g', 'Yards in a pound': 'yardsPerPound', Nm: 'nm', 'Cotton and spun-silk count': 'neCotton', 'Worsted count': 'neWorsted',
+  'Linen lea': 'lea', 'Woollen run': 'run', Denier: 'denier', 'Thickness, beaten down': 'compressedDiameterMm', 'Thickness together, beaten down': 'compressedDiameterMm',
+  'Thickness, lying free': 'loftDiameterMm', 'Thickness together, lying free': 'loftDiameterMm',
+};
+
 export function answerYarn(typed: Yarn | undefined, reader: FormReader): Section {
   const needs = YARN_FIELDS;
   if (typed === undefined) return { ...NO_ANSWER, needs };
@@ -90,5 +97,5 @@ export function answerYarn(typed: Yarn | undefined, reader: FormReader): Section
   }
   if (!('denier' in outcome.value) || !reader.isSound(...YARN_FIELDS)) return { ...NO_ANSWER, needs };
   const lines = [...plies(typed, outcome.value), ...counts(outcome.value, reader.units), ...thickness(outcome.value, typed)];
-  return { lines, notes: outcome.warnings.map(({ message }) => message), needs };
+  return { lines: lines.map((line) => named(line, STEPS)), notes: outcome.warnings.map(({ message }) => message), needs, workings: () => written(explainYarn(typed, reader.units)) };
 }

@@ -21,7 +21,7 @@ export function Offered({ spacings, kind, units }: OfferedProps) {
   const { one } = LOOM_KINDS[LOOM_KIND_NAMES.find((name) => name === kind) ?? 'nailed-frame'].holder;
   return (
     <div className="scrolls mt-5">
-      <table className="table dense w-full">
+      <table className="table dense offered w-full">
         <caption className="h4">What this loom offers your yarn</caption>
         <thead><tr><th scope="col">Ends stand at</th><th scope="col" className="num">Apart</th><th scope="col">Your yarn</th><th scope="col" className="num">Strands to take</th></tr></thead>
         <tbody>

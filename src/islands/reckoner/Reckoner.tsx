@@ -101,7 +101,7 @@ export function Reckoner({ initial }: { initial: ReckonerForm }) {
         return (
           <Part key={name} id={name} title={title} says={says} alive={alive} fields={<Fields hand={hand} />} typed={<Typed form={form} fields={fields} />}>
             {more[name]?.before}
-            <Answers caption={title} section={answer[name]} errors={answer.errors} units={units} />
+            <Answers part={name} caption={title} section={answer[name]} errors={answer.errors} units={units} alive={alive} />
             {more[name]?.after}
           </Part>
         );
