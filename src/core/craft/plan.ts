@@ -1,5 +1,6 @@
 /** The plan: every number reckoned from a piece, whatever craft it is made in. */
-import { CRAFT_NAMES, CRAFTS, type Piece, type Plan, type PlanFor } from '#core/craft/crafts.ts';
+import type { Piece, Plan, PlanFor } from '#core/craft/crafts.ts';
+import { PLANNED_CRAFTS, PLANNERS } from '#core/craft/planners.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
 import type { Outcome } from '#core/outcome.ts';
@@ -9,8 +10,8 @@ import type { Units } from '#core/units/units.ts';
 export function planInFields(fields: Fields): Plan | undefined {
   const { findings } = fields;
   if (findings.count > 0) return undefined;
-  const craft = findings.soundly(() => fields.choice('craft', 'Craft', CRAFT_NAMES));
-  const reckoned = craft && CRAFTS[craft].plan(fields);
+  const craft = findings.soundly(() => fields.choice('craft', 'Craft', PLANNED_CRAFTS));
+  const reckoned = craft && PLANNERS[craft](fields);
   return reckoned && { ...reckoned, warnings: findings.warnings };
 }
 
