@@ -47,7 +47,7 @@ test.describe('without script', () => {
 
   test('how an answer was got unfolds, and leads to what gave it', async ({ page }) => {
     await page.goto('/reckoner');
-    await page.getByText('Show how “Warp ends” was got').first().locator('..').click();
+    await page.locator('summary', { hasText: '“Warp ends”' }).first().click();
     const ends = page.locator('#how-sett-ends-count');
     await expect(ends).toContainText('warp ends = n + r = 62');
     await ends.getByRole('link', { name: 'reckoned: see how' }).first().click();
@@ -65,7 +65,7 @@ test('by keyboard alone: type, hear, follow a number back, copy the link', async
   await expect(page.getByText('Warp ends', { exact: true }).first().locator('..')).toContainText('92 ends');
   await page.keyboard.press('Tab');
   await expect(page.getByLabel('From nail to nail', { exact: true })).toBeFocused();
-  await page.getByText('Show how “Warp ends” was got').first().locator('..').focus();
+  await page.locator('summary', { hasText: '“Warp ends”' }).first().focus();
   await page.keyboard.press('Enter');
   await page.locator('#how-sett-ends-count').getByRole('link').first().focus();
   await page.keyboard.press('Enter');

@@ -16,7 +16,7 @@ const NEEDS = [...YARN_FIELDS, ...SETT_FIELDS, ...ROW_FIELDS] as const;
 
 const FIXED_STEPS: Readonly<Record<string, string>> = {
   ends: 'ends.count', warp: 'warp.withMarginMm', pick: 'weft.pickMm', 'loom.height': 'loom.heightNeededMm', 'loom.width': 'loom.insideWidthNeededMm',
-  'spacer.width': 'cut.spacerCard.widthMm', 'spacer.height': 'cut.spacerCard.heightMm', 'dowel.length': 'cut.dowel.lengthMm', 'dowel.diameter': 'cut.dowel.minDiameterMm',
+  'spacer.width': 'cut.spacerCard.widthMm', 'spacer.height': 'cut.spacerCard.heightMm', 'dowel.length': 'cut.dowel.lengthMm',
   cord: 'cut.cordMm', 'warp.mass': 'warp.withMarginG', 'rows-per-load': 'yarns.ground.rowsPerLoad', mass: 'massG', hours: 'hours.likely',
 };
 const YARN_STEPS: Readonly<Record<string, string>> = { mass: 'withMarginG', balls: 'balls' };

@@ -30,7 +30,7 @@ const LINES: readonly (readonly [key: string, label: string])[] = [
   ['spacer.width', 'Spacer card, wide'],
   ['spacer.height', 'Spacer card, high'],
   ['dowel.length', 'Rod, long'],
-  ['dowel.diameter', 'Rod, thick at least'],
+  ['dowel.diameter', 'Rod, thick'],
   ['cord', 'Hanging cord'],
   ['mass', 'The piece weighs'],
 ];

@@ -1,5 +1,5 @@
 /** What a part answers: the numbers that matter, loud; the others in rows; and with each the way it was got. */
-import { Fragment, useMemo, useState } from 'react';
+import { Fragment, memo, useMemo, useState } from 'react';
 import { flushSync } from 'react-dom';
 import type { AnswerLine, FieldErrors, Section } from '#core/reckoner/answer-line.ts';
 import { FIELD_LABELS } from '#core/reckoner/field-labels.ts';
@@ -104,7 +104,8 @@ interface AnswersProps {
   readonly alive: boolean;
 }
 
-export function Answers({ part, caption, section, errors, units, alive }: AnswersProps) {
+/** Drawn anew only when its answer is. */
+export const Answers = memo(function Answers({ part, caption, section, errors, units, alive }: AnswersProps) {
   const { steps, between } = useSteps(part, section, alive);
   if (section.failed === true) return <p className="font-semibold text-mend">This could not be reckoned, and it is our fault. What you typed is kept, and the other parts answer on.</p>;
   if (section.lines.length === 0) return <Waiting needs={section.needs} errors={errors} />;
@@ -126,4 +127,4 @@ export function Answers({ part, caption, section, errors, units, alive }: Answer
       )}
     </>
   );
-}
+});

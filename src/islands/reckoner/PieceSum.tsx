@@ -1,4 +1,4 @@
-import { useMemo } from 'react';
+import { memo, useMemo } from 'react';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { PieceSection } from '#core/reckoner/answer-piece.ts';
 import type { Units } from '#core/units/units.ts';
@@ -6,7 +6,7 @@ import { Cloth } from '#islands/cloth/Cloth.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 
 /** The piece as it will hang, and that it fits. */
-export function PieceSum({ made, units }: { made: NonNullable<PieceSection['made']>; units: Units }) {
+export const PieceSum = memo(function PieceSum({ made, units }: { made: NonNullable<PieceSection['made']>; units: Units }) {
   const cloth = useMemo(() => clothPieceOf(made.piece, made.plan, 'This piece'), [made]);
   return (
     <div className="mb-5 grid gap-4">
@@ -14,4 +14,4 @@ export function PieceSum({ made, units }: { made: NonNullable<PieceSection['made
       <p><Flag kind="on">It fits this frame</Flag></p>
     </div>
   );
-}
+});

@@ -2,7 +2,7 @@
  * The reckoner: one form of eight parts that feed each other. Drawn on the server it works
  * by sending the form; alive it answers while one types, with the same core.
  */
-import { useEffect, useMemo, useReducer, useRef, useState, type ReactNode, type RefObject } from 'react';
+import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState, type ReactNode, type RefObject } from 'react';
 import { answerForm, type ReckonerAnswer } from '#core/reckoner/answer-form.ts';
 import { changeField, RECKONER_FIELDS, reckonerQuery, unitsOf, type ReckonerField, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
 import { amountText } from '#core/units/format-amount.ts';
@@ -83,11 +83,14 @@ function extras({ sett, shape, piece }: ReckonerAnswer, form: ReckonerForm): Par
 export function Reckoner({ initial }: { initial: ReckonerForm }) {
   const element = useRef<HTMLFormElement>(null);
   const { form, change, alive } = useForm(initial, element);
-  const answer = useMemo(() => answerForm(form), [form]);
+  // A letter stands in its field at once; the answers follow in the next frame, the last letter first.
+  const settled = useDeferredValue(form);
+  const answer = useMemo(() => answerForm(settled), [settled]);
   const address = useAddress(form, initial);
   const units = unitsOf(form);
+  const answered = unitsOf(settled);
   const hand: FormHand = { form, errors: answer.errors, change: (field, value) => { change([field, value]); } };
-  const more = extras(answer, form);
+  const more = extras(answer, settled);
   return (
     <form ref={element} className="reckoner" method="get" action="/reckoner" noValidate>
       <input type="hidden" name="shown" value={units} />
@@ -95,13 +98,13 @@ export function Reckoner({ initial }: { initial: ReckonerForm }) {
         <Choose name="units" legend="Units" quietLegend options={[{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }]} value={units} onChoose={(chosen) => { change(['units', chosen]); }} />
         <LinkTools address={address} alive={alive} />
       </div>
-      <p className="hide" role="status">{inWords(answer, units)}</p>
+      <p className="hide" role="status">{inWords(answer, answered)}</p>
       {PARTS.map(({ name, title, says, fields }) => {
         const Fields = FIELDS[name];
         return (
           <Part key={name} id={name} title={title} says={says} alive={alive} fields={<Fields hand={hand} />} typed={<Typed form={form} fields={fields} />}>
             {more[name]?.before}
-            <Answers part={name} caption={title} section={answer[name]} errors={answer.errors} units={units} alive={alive} />
+            <Answers part={name} caption={title} section={answer[name]} errors={answer.errors} units={answered} alive={alive} />
             {more[name]?.after}
           </Part>
         );

@@ -1,7 +1,8 @@
+import { memo } from 'react';
 import type { ShapeSection } from '#core/reckoner/answer-shape.ts';
 
 /** The shape as it is woven, from the foot up: drawn, and told row by row. */
-export function ShapeSum({ section: { drawing, runs } }: { section: ShapeSection }) {
+export const ShapeSum = memo(function ShapeSum({ section: { drawing, runs } }: { section: ShapeSection }) {
   if (drawing === undefined) return null;
   const { widthMm, heightMm, shape, warp, rows } = drawing;
   return (
@@ -24,4 +25,4 @@ export function ShapeSum({ section: { drawing, runs } }: { section: ShapeSection
       )}
     </div>
   );
-}
+});

@@ -10,7 +10,7 @@ import { describe, expect, test } from 'vitest';
 import { RECKON_DOCUMENT, SCHEMAS_OF } from '#contracts/reckon-api/document.ts';
 import { reckon, type Question } from '#core/craft/reckon.ts';
 import { answerQuestion } from '#server/web/answer-question.ts';
-import { WIRE_ROWS } from '../../reference/wire-rows.ts';
+import { faultsOf, WIRE_ROWS } from '../../reference/wire-rows.ts';
 
 const { components } = RECKON_DOCUMENT as { readonly components: { readonly schemas: Readonly<Record<string, object>> } };
 // Two words are OpenAPI's, not JSON Schema's.
@@ -41,10 +41,12 @@ test('names nothing it does not define, and defines nothing it does not name', (
 });
 
 describe('the check rows', () => {
-  test.each(WIRE_ROWS.map((row) => [row.row, row] as const))('%s: question and answer fit their schemas', async (_, { question, refused }) => {
+  test.each(WIRE_ROWS.map((row) => [row.row, row] as const))('%s: answered right, and question and answer fit their schemas', async (_, row) => {
+    const { question, refused } = row;
     const response = answerQuestion(JSON.stringify(question), 'a-request');
     const body: unknown = await response.json();
     const schemas = SCHEMAS_OF[whatOf(question)];
+    expect(faultsOf(row, { status: response.status, body })).toEqual([]);
     if (refused !== undefined) {
       expect(fits('Refusal', body)).toEqual([]);
       return;
