@@ -81,7 +81,7 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: FrameLoomPi
     case 'loop-pile':
       return { ...base, technique: 'loop-pile', rows: band.rows, loopMm: band.loopMm ?? (Math.PI * band.rodMm) / 2, groundColour: groundOf(index, piece) };
     case 'twining':
-      return { ...base, technique: 'twining', rows: band.rows };
+      return { ...base, technique: 'twining', rows: band.rows, ...(band.endsPerTwist !== undefined && { endsPerTwist: band.endsPerTwist }) };
     case 'hem-stitch':
       return { ...base, technique: 'hem-stitch', heightMm: 0, bundleEnds: band.bundleEnds, reachMm: band.reachPicks * plan.weft.pickSpacingMm };
   }

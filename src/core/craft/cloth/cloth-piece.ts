@@ -136,6 +136,8 @@ export interface LoopPileBand extends BandBase {
 export interface TwiningBand extends BandBase {
   readonly technique: 'twining';
   readonly rows: number;
+  /** Ends between two crossings of the strands; 1 when missing. */
+  readonly endsPerTwist?: number;
 }
 
 /** Has no height of its own: it lies on the edge of the band beside it and reaches into that band. */

@@ -112,9 +112,9 @@ export function ryaKnot(first: number, legEnds: number): Lay {
   ];
 }
 
-/** The two strands of a row of twining: where one lies in front the other lies behind, and they change places in every gap. */
-export function twinedRow(ends: Ends): readonly [Lay, Lay] {
-  return [tabbyRow(ends, 0, 'right'), tabbyRow(ends, 1, 'right')];
+/** The two strands of a row of twining: where one lies in front the other lies behind. They change places after so many ends each time. */
+export function twinedRow(ends: Ends, endsPerTwist = 1): readonly [Lay, Lay] {
+  return [floatsOf(ends, endsPerTwist, 'front', 'right'), floatsOf(ends, endsPerTwist, 'back', 'right')];
 }
 
 /** Hem-stitch, from right to left: behind a bundle, round the front of it, behind it again; then up into the cloth. */

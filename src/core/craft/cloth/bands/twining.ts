@@ -1,9 +1,9 @@
-/** Twining: two strands that cross between the ends, so every end carries one slanted stroke. */
+/** Twining: two strands that cross between the ends, so every end, or every few, carries one slanted stroke. */
 import type { TwiningBand } from '#core/craft/cloth/cloth-piece.ts';
 import { light, shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
-import { onFace, twinedRow } from '#core/craft/interlacement/lay.ts';
+import { endsIn, onFace, twinedRow } from '#core/craft/interlacement/lay.ts';
 import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
 
 export function drawTwining(band: TwiningBand, height: number, weave: Weave): string {
@@ -12,8 +12,10 @@ export function drawTwining(band: TwiningBand, height: number, weave: Weave): st
   const rise = pitch * 0.22;
   const { end, paths } = weave;
   let d = '';
-  for (const { from } of twinedRow({ first: 0, last: weave.ends - 1 }).flatMap((strand) => onFace(strand, 'front'))) {
-    d += `M${num((from + 0.1) * end)} ${num(rise)}l${num(end * 0.8)} ${num(-2 * rise)}`;
+  const perTwist = Math.max(1, Math.round((band.endsPerTwist ?? 1) / weave.grouped));
+  for (const pass of twinedRow({ first: 0, last: weave.ends - 1 }, perTwist).flatMap((strand) => onFace(strand, 'front'))) {
+    const long = endsIn(pass) * end;
+    d += `M${num(pass.from * end + long * 0.1)} ${num(rise)}l${num(long * 0.8)} ${num(-2 * rise)}`;
   }
   let drawn = box(0, 0, weave.width, height, shade(band.colour, 0.6)) + drawEnds(0, height, weave);
   for (let row = 0; row < count; row++) {

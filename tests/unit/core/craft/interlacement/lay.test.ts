@@ -52,6 +52,10 @@ describe('the other techniques', () => {
     one.forEach((pass, index) => expect([pass.face, two[index]?.face].sort()).toEqual(['back', 'front']));
   });
 
+  test('twined in pairs the strands change places after every second end', () => {
+    expect(twinedRow({ first: 0, last: 4 }, 2).map(written)).toEqual(['F0-1 B2-3 F4', 'B0-1 F2-3 B4']);
+  });
+
   test('loops stand on the face only, never at a selvedge', () => {
     const raised = loopRow(TEN, 0).filter((pass) => pass.raised === 'loop');
     expect(raised.map(({ from }) => from)).toEqual([2, 4, 6, 8]);
