@@ -5,6 +5,7 @@ import { following } from './following.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
 import { pieces } from './pieces.ts';
+import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, office, people, pieces, workroom };
+export const server = { bench, checkout, following, office, people, pieces, videos, workroom };

@@ -51,6 +51,8 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/series/[slug]/parts/[part]/preview': [['ilse', ofPart('/preview')]],
   '/workroom/series/[slug]/parts/[part]/settings': [['ilse', ofPart('/settings')]],
   '/workroom/series/[slug]/parts/[part]/versions': [['ilse', ofPart('/versions')]],
+  '/workroom/series/[slug]/parts/[part]/video': [['ilse', ofPart('/video')]],
+  '/workroom/series/[slug]/videos/[name]': [['ilse', '/workroom/series/low-tide/videos/dress-the-loom']],
   '/workroom/students': [['ilse', '/workroom/students']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
 };

@@ -54,6 +54,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
     { at: ({ freeVideo }) => `/media/${freeVideo}/video`, answers: EVERYBODY },
     { at: ({ gatedVideo }) => `/media/${gatedVideo}/video`, answers: '404 404 200 404 200 200 404' },
     { at: ({ gatedVideo }) => `/media/${gatedVideo}/captions`, answers: '404 404 200 404 200 200 404' },
+    { at: ({ gatedVideo }) => `/media/${gatedVideo}/captions-draft`, answers: '404 404 404 404 200 200 404' },
     { at: ({ photo }) => `/media/${photo}/original`, answers: '404' },
     { at: `/media/${'0'.repeat(26)}/large`, answers: '404' },
   ],
@@ -88,8 +89,10 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/sign-out': [{ at: '/sign-out', answers: '303' }],
   '/sign-up': [{ at: '/sign-up', answers: AT_THE_DOOR }],
   '/teachers/[handle]': [{ at: '/teachers/saltmarsh', answers: EVERYBODY }, { at: '/teachers/nobody', answers: '404' }],
+  '/api/workroom/captions': [{ at: '/api/workroom/captions', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/lesson-check': [{ at: '/api/workroom/lesson-check', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/lesson-draft': [{ at: '/api/workroom/lesson-draft', post: true, answers: '401 403 403 422 422 403 403' }],
+  '/api/workroom/videos/[video]': [{ at: ({ gatedVideo }) => `/api/workroom/videos/${gatedVideo}`, answers: '401 403 403 404 200 403 403' }],
   '/workroom': [{ at: '/workroom', answers: BENCH }],
   '/workroom/bench': [{ at: '/workroom/bench', answers: BENCH }],
   '/workroom/money': [{ at: '/workroom/money', answers: TEACHERS }],
@@ -101,6 +104,8 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/series/[slug]/parts/[part]/preview': [{ at: ofPart('/preview'), answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]/settings': [{ at: ofPart('/settings'), answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]/versions': [{ at: ofPart('/versions'), answers: OWNER }],
+  '/workroom/series/[slug]/parts/[part]/video': [{ at: ofPart('/video'), answers: OWNER }],
+  '/workroom/series/[slug]/videos/[name]': [{ at: '/workroom/series/low-tide/videos/dress-the-loom', answers: OWNER }, { at: '/workroom/series/low-tide/videos/nothing', answers: '303 403 403 404 404 403 403' }],
   '/workroom/students': [{ at: '/workroom/students', answers: TEACHERS }],
 };
 

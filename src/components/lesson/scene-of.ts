@@ -75,14 +75,16 @@ function pictureOf(media: SeriesMediaFile | undefined): ScenePicture | undefined
 function videoOf(media: SeriesMediaFile | undefined): SceneVideo | undefined {
   const video = media?.files['video'];
   if (media === undefined || video === undefined) return undefined;
+  const { poster = 'poster', cues = [], chapters = [] } = media.detail;
   return {
     title: media.title,
     src: addressOf(media, 'video'),
     type: video.contentType,
-    ...(media.files['poster'] === undefined ? {} : { poster: addressOf(media, 'poster') }),
-    ...(media.files['captions'] === undefined ? {} : { captions: addressOf(media, 'captions') }),
-    chapters: media.detail.chapters ?? [],
-    cues: media.detail.cues ?? [],
+    durationMs: media.durationMs ?? 0,
+    ...(media.files[poster] === undefined ? {} : { poster: addressOf(media, poster) }),
+    ...(cues.length === 0 ? {} : { captions: addressOf(media, media.isDraft ? 'captions-draft' : 'captions') }),
+    chapters,
+    cues,
   };
 }
 

@@ -34,6 +34,7 @@ export interface SceneVideo {
   readonly src: string;
   /** Content type of the file, such as `video/mp4`. */
   readonly type: string;
+  readonly durationMs: number;
   readonly poster?: string;
   /** Address of the captions as WebVTT. */
   readonly captions?: string;

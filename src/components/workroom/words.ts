@@ -16,7 +16,8 @@ export const TEXT_WORDS: Readonly<Record<TextState, string>> = {
 };
 
 export const pathOfSeries = (slug: string): string => `/workroom/series/${slug}`;
-export const pathOfPart = (slug: string, part: string, page: '' | '/settings' | '/gather' | '/preview' | '/versions' = ''): string => `${pathOfSeries(slug)}/parts/${part}${page}`;
+export const pathOfPart = (slug: string, part: string, page: '' | '/settings' | '/gather' | '/video' | '/preview' | '/versions' = ''): string => `${pathOfSeries(slug)}/parts/${part}${page}`;
+export const pathOfVideo = (slug: string, name: string): string => `${pathOfSeries(slug)}/videos/${name}`;
 
 /** Where a missing thing is mended. */
 export function pathOfMissing(slug: string, place: MissingPlace, part: DeskPart | undefined, line?: number): string {

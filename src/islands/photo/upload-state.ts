@@ -14,6 +14,9 @@ export type UploadEvent =
   | { readonly kind: 'send' | 'dropped' | 'done' | 'stop' | 'put-away' }
   | { readonly kind: 'progress'; readonly sent: number };
 
+/** Between tries while there is no signal: 4 s, 8 s, 16 s, then every 30 s. */
+export const waitMs = (tries: number): number => Math.min(30_000, 2_000 * 2 ** tries);
+
 export function uploadAfter(state: UploadState, event: UploadEvent): UploadState {
   switch (event.kind) {
     case 'choose':

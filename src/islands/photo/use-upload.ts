@@ -1,10 +1,7 @@
 import { useCallback, useEffect, useReducer, useRef } from 'react';
 import { photoFault } from './photo-rules.ts';
-import { uploadAfter, type UploadState } from './upload-state.ts';
+import { uploadAfter, waitMs, type UploadState } from './upload-state.ts';
 import type { StartUpload, Upload } from './uploader.ts';
-
-/** Between tries while there is no signal: 4 s, 8 s, 16 s, then every 30 s. */
-const waitMs = (tries: number): number => Math.min(30_000, 2_000 * 2 ** tries);
 
 export interface PhotoOnItsWay {
   readonly state: UploadState;

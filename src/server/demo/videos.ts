@@ -43,7 +43,6 @@ async function drawVideo({ store, series, ownerId, name, title, storyboard, piec
     const size = { width: drawn.width, height: drawn.height };
     const files = {
       video: await keep(drawn.videoPath, 'video.mp4', 'video/mp4', size),
-      captions: await keep(drawn.captionsPath, 'captions.vtt', 'text/vtt; charset=utf-8'),
       poster: await keep(drawn.posterPath, 'poster.jpg', 'image/jpeg', size),
     };
     const media = await Media.create({

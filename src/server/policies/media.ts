@@ -8,10 +8,11 @@ export type MediaUse =
   /** A video or picture in parts of a series; `accesses` are the asker's to those parts. */
   | { readonly kind: 'lesson'; readonly workroomId: number; readonly accesses: readonly LessonAccess[] };
 
+/** Whether somebody looks after the file, and so sees drafts of it too. */
+export function looksAfterMedia(actor: Actor | null, ownerId: number, uses: readonly MediaUse[]): boolean {
+  return (actor !== null && actor.userId === ownerId) || uses.some(({ workroomId }) => worksIn(actor, workroomId));
+}
+
 export function maySeeMedia(actor: Actor | null, ownerId: number, uses: readonly MediaUse[]): boolean {
-  if (actor !== null && actor.userId === ownerId) return true;
-  return uses.some((use) => {
-    if (worksIn(actor, use.workroomId)) return true;
-    return use.kind === 'progress-photo' ? actor?.userId === use.studentId : use.accesses.some(mayRead);
-  });
+  return looksAfterMedia(actor, ownerId, uses) || uses.some((use) => (use.kind === 'progress-photo' ? actor?.userId === use.studentId : use.accesses.some(mayRead)));
 }

@@ -35,6 +35,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/videos/[...upload]': 'teacher',
   '/api/workroom/lesson-check': 'teacher',
   '/api/workroom/lesson-draft': 'teacher',
+  '/api/workroom/captions': 'teacher',
+  '/api/workroom/videos/[video]': 'teacher',
   '/media/[id]/[file]': 'public',
   '/series/[slug]/[part]': 'public',
   '/series/[slug]/[part]/loomside': 'public',
@@ -71,4 +73,6 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/series/[slug]/parts/[part]/preview': 'teacher',
   '/workroom/series/[slug]/parts/[part]/settings': 'teacher',
   '/workroom/series/[slug]/parts/[part]/versions': 'teacher',
+  '/workroom/series/[slug]/parts/[part]/video': 'teacher',
+  '/workroom/series/[slug]/videos/[name]': 'teacher',
 };

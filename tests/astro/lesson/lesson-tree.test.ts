@@ -131,7 +131,7 @@ describe('parts', () => {
 
   test('a video plays with captions, and its chapters and words are there without script', async () => {
     const page = await draw('<Video name="v"/>', {
-      videos: { v: { title: 'Dress', src: '/media/v/video', type: 'video/mp4', captions: '/media/v/captions', chapters: [{ atMs: 0, title: 'First' }, { atMs: 3_725_000, title: 'Last' }], cues: [{ fromMs: 0, toMs: 900, words: 'Lay it down.' }, { fromMs: 900, toMs: 1_800, words: 'Wind.' }] } },
+      videos: { v: { title: 'Dress', src: '/media/v/video', type: 'video/mp4', durationMs: 3_800_000, captions: '/media/v/captions', chapters: [{ atMs: 0, title: 'First' }, { atMs: 3_725_000, title: 'Last' }], cues: [{ fromMs: 0, toMs: 900, words: 'Lay it down.' }, { fromMs: 900, toMs: 1_800, words: 'Wind.' }] } },
     });
     expect(page.querySelector('video[controls][preload=metadata] > track[kind=captions][default]')?.getAttribute('src')).toBe('/media/v/captions');
     expect([...page.querySelectorAll('.chapter-list a')].map((link) => [link.getAttribute('href'), textOf(link)])).toEqual([['/media/v/video#t=0', '0:00First'], ['/media/v/video#t=3725', '1:02:05Last']]);

@@ -3,15 +3,21 @@ import { QueryTypes } from 'sequelize';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { Media } from '#server/models/index.ts';
-import { maySeeMedia, type MediaUse } from '#server/policies/media.ts';
+import { looksAfterMedia, maySeeMedia, type MediaUse } from '#server/policies/media.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 
+export interface MediaFor {
+  readonly media: Media;
+  /** Whether the asker looks after it, and so may see its drafts. */
+  readonly looksAfter: boolean;
+}
+
 /** The file, when `actor` may see it; null when there is none or it must look so. */
-export async function mediaFor(actor: Actor | null, publicId: string, now: Date): Promise<Media | null> {
+export async function mediaFor(actor: Actor | null, publicId: string, now: Date): Promise<MediaFor | null> {
   const media = await Media.findOne({ where: { publicId } });
   if (media === null) return null;
   const uses = media.kind === 'photo' ? await photoUses(media.id) : await lessonUses(actor, media.id, now);
-  return maySeeMedia(actor, media.ownerId, uses) ? media : null;
+  return maySeeMedia(actor, media.ownerId, uses) ? { media, looksAfter: looksAfterMedia(actor, media.ownerId, uses) } : null;
 }
 
 async function photoUses(mediaId: number): Promise<MediaUse[]> {
@@ -24,15 +30,16 @@ async function photoUses(mediaId: number): Promise<MediaUse[]> {
   return rows.map((row) => ({ kind: 'progress-photo', ...row }));
 }
 
+/** A draft is used in no part yet, whatever the texts say: only who looks after the series finds it. */
 async function lessonUses(actor: Actor | null, mediaId: number, now: Date): Promise<MediaUse[]> {
   const rows = await sequelize.query<{ slug: string; lessonId: number | null }>(
     `SELECT s.slug, l.id AS lessonId
        FROM series_media m
        JOIN series s ON s.id = m.series_id
-       LEFT JOIN lessons l ON l.series_id = s.id AND l.taken_out_at IS NULL
+       LEFT JOIN lessons l ON l.series_id = s.id AND l.taken_out_at IS NULL AND m.media_id = :media
         AND EXISTS (SELECT 1 FROM lesson_versions v WHERE v.id = l.published_version_id AND JSON_CONTAINS(JSON_EXTRACT(v.facts, '$.media[*].name'), JSON_QUOTE(m.name)))
-      WHERE m.media_id = ?`,
-    { replacements: [mediaId], type: QueryTypes.SELECT },
+      WHERE m.media_id = :media OR m.draft_media_id = :media`,
+    { replacements: { media: mediaId }, type: QueryTypes.SELECT },
   );
   const uses: MediaUse[] = [];
   for (const slug of new Set(rows.map((row) => row.slug))) {

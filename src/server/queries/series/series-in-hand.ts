@@ -5,7 +5,7 @@ import { planPiece } from '#core/craft/plan.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import type { PartInHand, SeriesInHand } from '#core/series/missing.ts';
 import { GatheringItem, Lesson, PatternPiece, type Series } from '#server/models/index.ts';
-import { mediaOfSeries } from '#server/queries/media/media-of-series.ts';
+import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
 import { partOpenings } from '#server/queries/series/part-openings.ts';
 
 export interface Draft {
@@ -17,7 +17,7 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
   const [lessons, piece, media] = await Promise.all([
     Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
-    mediaOfSeries(series.id),
+    mediaOnDesk(series.id),
   ]);
   const items = lessons.length === 0 ? [] : await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) } });
   const plan = piece === null ? null : planPiece(piece.data);
@@ -56,6 +56,11 @@ function factsOfText(text: LessonText | RefusedText, media: readonly SeriesMedia
     stepCount: text.steps.length,
     unknownAmounts: text.amounts.filter(isUnknown),
     unknownMedia: text.media.filter((wanted) => named(wanted) === undefined).map(({ name }) => name),
-    uncaptionedVideos: text.media.filter((wanted) => wanted.kind === 'video' && named(wanted)?.files['captions'] === undefined && named(wanted) !== undefined).map(({ name }) => name),
+    uncaptionedVideos: text.media.filter((wanted) => wanted.kind === 'video' && hasNoCaptions(named(wanted))).map(({ name }) => name),
   };
+}
+
+/** A video that is not there is missing as a whole. */
+function hasNoCaptions(video: SeriesMediaFile | undefined): boolean {
+  return video !== undefined && (video.detail.cues ?? []).length === 0;
 }

@@ -9,7 +9,7 @@ import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { GatheringItem, Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
-import { mediaOfSeries } from '#server/queries/media/media-of-series.ts';
+import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
 
 export interface PartOfSeries {
   readonly id: number;
@@ -78,7 +78,7 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
     lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
     GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
-    mediaOfSeries(series.id),
+    mediaOnDesk(series.id),
     sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
   ]);
   const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));

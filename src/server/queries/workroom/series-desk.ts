@@ -12,7 +12,7 @@ import { Enrolment, PatternPiece, Series, Workroom } from '#server/models/index.
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
-/** How a part's text stands to what students read. */
+/** How a part's text, with the videos it speaks of, stands to what students read. */
 export type TextState = 'empty' | 'never-published' | 'changed' | 'as-published';
 
 export interface DeskPart {
@@ -62,14 +62,17 @@ export interface SeriesDesk {
 
 interface PartRow {
   publicId: string; position: number; title: string; minutes: number; isPreview: number; opens: OpeningRule; checkpoint: Checkpoint | null;
-  isEmpty: number; publishedAt: Date | null; isSame: number | null; takenOutAt: Date | null; lineCount: number;
+  isEmpty: number; publishedAt: Date | null; isSame: number | null; takenOutAt: Date | null; lineCount: number; hasNewMedia: number;
 }
 
 // Texts are compared where they lie; none of them has to travel for it. BINARY: letters in another case are a change.
 const PARTS = `
   SELECT l.public_id AS publicId, l.position, l.title, l.minutes, l.is_preview AS isPreview, l.opens, l.checkpoint,
          TRIM(l.draft_source) = '' AS isEmpty, v.created_at AS publishedAt, BINARY v.source = BINARY l.draft_source AS isSame, l.taken_out_at AS takenOutAt,
-         (SELECT COUNT(*) FROM gathering_items g WHERE g.lesson_id = l.id) AS lineCount
+         (SELECT COUNT(*) FROM gathering_items g WHERE g.lesson_id = l.id) AS lineCount,
+         EXISTS (SELECT 1 FROM series_media m LEFT JOIN media d ON d.id = m.draft_media_id LEFT JOIN media p ON p.id = m.media_id
+                  WHERE m.series_id = l.series_id AND (d.state = 'ready' OR p.draft_detail IS NOT NULL)
+                    AND JSON_CONTAINS(JSON_EXTRACT(l.draft_reading, '$.media[*].name'), JSON_QUOTE(m.name))) AS hasNewMedia
     FROM lessons l
     LEFT JOIN lesson_versions v ON v.id = l.published_version_id
    WHERE l.series_id = ?
@@ -99,7 +102,7 @@ export async function seriesDesk(actor: Actor, slug: string): Promise<SeriesDesk
   };
 }
 
-function partOf({ publicId, title, minutes, isPreview, opens, checkpoint, isEmpty, isSame, publishedAt, lineCount }: PartRow, index: number): DeskPart {
-  const textState: TextState = publishedAt !== null ? (isSame === 1 ? 'as-published' : 'changed') : isEmpty === 1 ? 'empty' : 'never-published';
+function partOf({ publicId, title, minutes, isPreview, opens, checkpoint, isEmpty, isSame, publishedAt, lineCount, hasNewMedia }: PartRow, index: number): DeskPart {
+  const textState: TextState = publishedAt !== null ? (isSame === 1 && hasNewMedia === 0 ? 'as-published' : 'changed') : isEmpty === 1 ? 'empty' : 'never-published';
   return { publicId, number: index + 1, title, minutes, isPreview: isPreview === 1, opens, checkpoint, textState, publishedAt, lineCount };
 }

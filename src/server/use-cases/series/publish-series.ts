@@ -7,9 +7,11 @@ import { AppError, authorize, found } from '#server/errors.ts';
 import { LessonVersion, Series } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { seriesInHand, type Draft } from '#server/queries/series/series-in-hand.ts';
+import { publishMedia } from './_publish-media.ts';
 
 /**
- * Makes a series open to buyers, and each draft that differs from what students read the text they read from now on.
+ * Makes a series open to buyers, and each draft that differs from what students read the text they read from now on;
+ * videos and their captions likewise.
  * Doing it again publishes what was changed since.
  * @throws VALIDATION with the list of what blocks.
  */
@@ -24,6 +26,7 @@ export async function publishSeries(ctx: Context, slug: string): Promise<void> {
       throw new AppError('VALIDATION', { says: `It is not ready yet. ${blocking.map(({ part, says }) => (part === null ? says : `Part ${part}: ${says}`)).join(' ')}` });
     }
     for (const draft of drafts) await publishDraft(ctx, draft);
+    await publishMedia(series.id);
     await series.update({ state: 'published', publishedAt: series.publishedAt ?? ctx.clock.now() });
     await audit(ctx, 'publish-series', { kind: 'series', id: series.publicId });
   });

@@ -27,8 +27,8 @@ const video: SeriesMediaFile = {
   name: 'dress-the-loom',
   title: 'Dress the loom',
   publicId: 'v'.repeat(26),
-  files: { video: file, captions: { ...file, contentType: 'text/vtt' } },
-  detail: { chapters: [{ atMs: 0, title: 'Begin' }] },
+  files: { video: file },
+  detail: { chapters: [{ atMs: 0, title: 'Begin' }], cues: [{ fromMs: 0, toMs: 900, words: 'Wind the warp.' }] },
 };
 
 describe('the scene of a lesson', () => {
@@ -54,12 +54,13 @@ describe('the scene of a lesson', () => {
 
   test('gives a video the addresses of what was made of it', () => {
     expect(sceneOf(sources('<Video name="dress-the-loom"/>', { media: [video] })).videos['dress-the-loom']).toEqual({
+      durationMs: 60_000,
       title: 'Dress the loom',
       src: `/media/${video.publicId}/video`,
       type: 'video/mp4',
       captions: `/media/${video.publicId}/captions`,
       chapters: [{ atMs: 0, title: 'Begin' }],
-      cues: [],
+      cues: [{ fromMs: 0, toMs: 900, words: 'Wind the warp.' }],
     });
   });
 

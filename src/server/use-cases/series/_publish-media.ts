@@ -1,0 +1,14 @@
+import { Op } from 'sequelize';
+import { Media, SeriesMedia } from '#server/models/index.ts';
+
+/** Puts videos that are ready in the place of those they replace, and their drafted words in the place of what students read. */
+export async function publishMedia(seriesId: number): Promise<void> {
+  for (const named of await SeriesMedia.findAll({ where: { seriesId, draftMediaId: { [Op.ne]: null } } })) {
+    const draft = named.draftMediaId === null ? null : await Media.findByPk(named.draftMediaId);
+    if (draft?.state === 'ready') await named.update({ mediaId: draft.id, draftMediaId: null });
+  }
+  const shown = await SeriesMedia.findAll({ where: { seriesId, mediaId: { [Op.ne]: null } } });
+  for (const media of await Media.findAll({ where: { id: shown.map(({ mediaId }) => mediaId ?? 0), draftDetail: { [Op.ne]: null } } })) {
+    await media.update({ detail: media.draftDetail ?? media.detail, draftDetail: null });
+  }
+}
