@@ -8,6 +8,6 @@ export const CORD_CAUTIONS: readonly Caution[] = [
   },
   {
     title: 'Hands, shoulders, and what it hangs from',
-    says: 'Rest for a few minutes every half hour, keep the knot at the height of your elbows, and stop when something hurts or tingles. What you knot on must bear a steady pull, and its fixing in the wall at least four times what hangs from it. A qualified person knows your wall better than we do.',
+    says: 'Rest for a few minutes every half hour, keep the knot at the height of your elbows, and stop when something hurts or tingles. What you knot on must bear a steady pull, and its fixing in the wall at least four times what hangs from it. This is general information: follow your local rules and the maker’s word for hook and fixing, and ask a qualified person about your wall.',
   },
 ];
