@@ -34,7 +34,7 @@ test.describe('without script', () => {
     expect(page.url()).toContain('width=20');
     await page.getByLabel('in, oz').check();
     await page.getByLabel('From nail to nail', { exact: true }).fill('5 7/16 mm');
-    await page.getByLabel('Shape').selectOption('circle');
+    await page.getByLabel('Shape', { exact: true }).selectOption('circle');
     await page.getByRole('button', { name: 'Reckon' }).first().click();
     await expect(page.getByLabel('Finished width')).toHaveValue('7 7/8');
     await expect(page.getByLabel('Radius')).toHaveValue('2 3/8');
