@@ -43,7 +43,7 @@ function Origin({ input, steps }: { input: WorkingInput; steps: Steps }) {
 export function Step({ working, steps }: { working: Working; steps: Steps }) {
   const margin = marginSentence(working);
   return (
-    <div className="step" id={stepAnchor(steps.part, working.id)} tabIndex={-1}>
+    <div className="one-working" id={stepAnchor(steps.part, working.id)} tabIndex={-1}>
       <p><b>{working.name}</b> = <code>{stepFormula(working.formula)}</code> = {stepValue(working.value, working.unit)}</p>
       <ul>
         {working.inputs.map((input) => (
