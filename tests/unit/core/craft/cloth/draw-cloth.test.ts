@@ -166,6 +166,18 @@ describe('the ways up of a cloth', () => {
     expect(height / width).toBeCloseTo((700 * 360) / 480 / 400 + 0.07, 1);
   });
 
+  it('draws a loom of which no measures are known about its cloth, with nails above and below', () => {
+    const { width, height } = size(drawCloth(wovenPiece({ loom: undefined, bands: [SOUMAK] }), { id: 'a', as: 'loom', width: 400 }));
+    expect(width).toBe(400);
+    expect(height).toBeGreaterThan((60 / 400) * 400 * 0.83);
+    expect(height).toBeLessThan(400);
+  });
+
+  it('draws pile without a broken number for rows that are lower than they can be seen', () => {
+    const low = drawCloth(wovenPiece({ bands: [{ ...RYA, heightMm: 1, rows: 9 }, SOUMAK] }), { id: 'a', as: 'hanging', width: 136 });
+    expect(low).not.toMatch(/NaN|Infinity|undefined/);
+  });
+
   it('hangs knotted cords from the same dowel', () => {
     const svg = drawCloth(CORDS, { id: 'a', as: 'hanging', width: 150 });
     expect(svg).toContain('class="cord"');

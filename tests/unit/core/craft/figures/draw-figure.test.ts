@@ -3,6 +3,7 @@ import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import { FIGURE_KINDS, isFigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { stepAt, stepsOf } from '#core/craft/figures/figure-steps.ts';
 import { figureWords } from '#core/craft/figures/figures.ts';
+import { pieceWith, planOf, PLAIN_PIECE } from '../a-piece.ts';
 import { INPUT, PIECE } from './figure-input.ts';
 
 const wordsIn = (svg: string): string => [...svg.matchAll(/<text[^>]*>([^<]*)</g)].map((found) => found[1]).join(' | ');
@@ -51,6 +52,17 @@ describe.each(FIGURE_KINDS)('the figure "%s"', (kind) => {
     const imperial = figureWords(kind, { ...INPUT, units: 'in' }) + wordsIn(drawFigure(kind, { ...INPUT, units: 'in' }));
     expect(imperial).not.toMatch(/\d\s?(mm|cm)\b/);
     if (/\d\s?(mm|cm)\b/.test(metric)) expect(imperial).toMatch(/\d\s(in|oz)\b/);
+  });
+
+  it.each([
+    ['doubled ends along two nails, no dowel and yarns without colours', { warp: { yarn: { tex: 400 }, endsTogether: 2 }, loom: { ...PLAIN_PIECE.loom, warping: 'two-nail' } }],
+    ['every second nail and a dowel', { loom: { ...PLAIN_PIECE.loom, nailPitchMm: 5, everyNthNail: 2 }, dowel: { diameterMm: 12 } }],
+  ] as const)('shows a piece with %s as well', (_, parts) => {
+    const piece = pieceWith(parts);
+    const input = { piece, plan: planOf(piece), units: 'cm' } as const;
+    for (const progress of [0, 0.5, 1]) expect(drawFigure(kind, input, progress)).not.toMatch(/NaN|undefined|Infinity/);
+    expect(figureWords(kind, input)).not.toMatch(/NaN|undefined|Infinity/);
+    for (const { words } of stepsOf(kind, input)) expect(words).not.toMatch(/NaN|undefined|Infinity/);
   });
 
   it('does without a technique the piece does not use', () => {
