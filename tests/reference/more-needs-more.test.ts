@@ -4,8 +4,9 @@ import { test } from 'vitest';
 import { weftFacedCrimp } from '#core/craft/crimp.ts';
 import { pickLength, turnLength } from '#core/craft/picks.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
+import { cases } from '../support/random-cases.ts';
 
-const RUNS = { numRuns: 1500, seed: 20260821 };
+const RUNS = { numRuns: cases(1500), seed: 20260821 };
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
 
 test('more ends, more rows and more crimp never need less yarn', () => {

@@ -261,7 +261,7 @@ describe('whole pieces', () => {
           && near(b.weft.crimp, a.weft.crimp, 1e-7) && b.ends.count === a.ends.count && near(b.loom.heightNeededMm, k * a.loom.heightNeededMm, 1e-9)
           && b.bands.every(({ picks }, index) => picks === a.bands[index]?.picks);
       }),
-      { ...RUNS, numRuns: 1000 },
+      { ...RUNS, numRuns: cases(1000) },
     );
   }, 60_000);
 

@@ -4,6 +4,7 @@ import { describe, expect, test } from 'vitest';
 import { planPiece } from '#core/craft/plan.ts';
 import { explainPiece } from '#core/craft/show-how/explain.ts';
 import type { Working } from '#core/craft/show-how/working.ts';
+import { cases } from '../../support/random-cases.ts';
 import { expectClose } from '../close.ts';
 import workedPiece from '../worked-piece.json' with { type: 'json' };
 import { figures, TABLE } from '../worked-piece-table.ts';
@@ -146,5 +147,5 @@ test('of a thousand pieces that can be woven every number is explained', () => {
     const workings = explained(piece);
     expect(faultsOf(workings, piece)).toEqual([]);
     expectReachable(workings, planOf(piece), /^bands\.\d+\.index$/u);
-  }), { numRuns: 1000, seed: 20260821 });
+  }), { numRuns: cases(1000), seed: 20260821 });
 }, 300_000);

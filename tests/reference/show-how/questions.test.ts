@@ -5,11 +5,12 @@ import { reckon } from '#core/craft/reckon.ts';
 import { explainRya, explainShape, explainSoumak, explainTakeUp, explainYarn } from '#core/craft/show-how/explain.ts';
 import type { Working } from '#core/craft/show-how/working.ts';
 import type { Outcome } from '#core/outcome.ts';
+import { cases } from '../../support/random-cases.ts';
 import { expectReachable, faultsOf, workingsOf } from './follow.ts';
 
 const between = (min: number, max: number) => fc.double({ min, max, noNaN: true });
 const whole = (min: number, max: number) => fc.integer({ min, max });
-const RUNS = { numRuns: 1000, seed: 20260821 };
+const RUNS = { numRuns: cases(1000), seed: 20260821 };
 
 /** Explained, followed, and compared with the answer to the same question; refused where that is refused. */
 function holdsUp(question: Record<string, unknown>, explained: Outcome<readonly Working[]>, asked: unknown, except?: RegExp): boolean {

@@ -6,6 +6,7 @@ import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import type { DyePiece, DyePlan } from '#core/craft/dyeing/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { amountText } from '#core/units/format-amount.ts';
+import { cases } from '../../../../support/random-cases.ts';
 
 const WOOL: DyePiece = { craft: 'dyeing', fibre: { kind: 'wool', massG: 250 }, mordant: { agent: 'alum' }, tartar: {}, dye: { percent: 100 }, iron: {} };
 const COTTON: DyePiece = { craft: 'dyeing', fibre: { kind: 'cotton', massG: 200 }, mordant: { agent: 'aluminium-acetate' }, tannin: {}, dye: { percent: 150 } };
@@ -70,12 +71,12 @@ describe('a dyeing', () => {
       const at = (grams: number, share: number): number => planOf({ ...WOOL, fibre: { kind: 'wool', massG: grams }, mordant: { agent: 'alum', percent: share } }).steps[1]?.agents[0]?.massG ?? 0;
       expect(at(2 * massG, percent)).toBeCloseTo(2 * at(massG, percent), 9);
       expect(at(massG, percent + 1)).toBeGreaterThan(at(massG, percent));
-    }), { numRuns: 1000 });
+    }), { numRuns: cases(1000) });
   });
 
   test('nothing a person may send makes it throw', () => {
     fc.assert(fc.property(fc.jsonValue({ maxDepth: 4 }), fc.constantFrom('fibre', 'mordant', 'tartar', 'tannin', 'dye', 'iron', 'liquorRatio'), (nonsense, key) => {
       expect(() => planPiece({ ...WOOL, [key]: nonsense })).not.toThrow();
-    }), { numRuns: 1500 });
+    }), { numRuns: cases(1500) });
   });
 });

@@ -9,6 +9,7 @@ import { EXAMPLE } from '#core/craft/macrame/example.ts';
 import type { MacramePiece, Section } from '#core/craft/macrame/piece.ts';
 import { yarnTable } from '#core/gathering/yarn-table.ts';
 import { amountText } from '#core/units/format-amount.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { planOf } from './a-hanging.ts';
 
 const PLAN = planOf(EXAMPLE);
@@ -28,7 +29,7 @@ describe('a knotted piece drawn', () => {
       const svg = draw({ ...EXAMPLE, rod: { kind, diameterMm: 40 }, columns: [{ yarn: 'main', cords: 2 * pairs, sections }], foot: [{ technique: 'gathering', wraps: 12 }] });
       expect(svg).not.toMatch(/NaN|undefined|Infinity|\sstyle=|<script/);
       expect(svg.length).toBeLessThan(400 * 1024);
-    }), { numRuns: 60 });
+    }), { numRuns: cases(60) });
   });
 
   test('a knot is drawn once and placed wherever it comes again', () => {

@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import type { MacramePiece, Section } from '#core/craft/macrame/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { BRAID, hangingOf, planOf, refusals } from './a-hanging.ts';
 
 describe('the plan of a knotted piece', () => {
@@ -80,7 +81,7 @@ describe('a knotted piece that cannot be made', () => {
   });
 });
 
-const RUNS = { numRuns: 1200, seed: 20261201 };
+const RUNS = { numRuns: cases(1200), seed: 20261201 };
 const mm = (most: number) => fc.double({ min: 1, max: most, noNaN: true });
 const sections = fc.array(
   fc.oneof(
@@ -143,6 +144,6 @@ describe('whatever a knotted piece is', () => {
     fc.assert(fc.property(fc.jsonValue({ maxDepth: 5 }), fc.constantFrom('rod', 'yarns', 'columns', 'foot', 'takes', 'allowances', 'seed'), (nonsense, key) => {
       const planned = planPiece({ ...BRAID, [key]: nonsense });
       if (!planned.ok) expect(planned.problems.length).toBeGreaterThan(0);
-    }), { ...RUNS, numRuns: 2000 });
+    }), { ...RUNS, numRuns: cases(2000) });
   });
 });

@@ -4,6 +4,7 @@ import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import { planRest, type RestPlan, type WovenSoFar } from '#core/craft/rest/plan-rest.ts';
 import { widen } from '#core/craft/fitting/widen.ts';
 import { refuseChanges } from '#core/craft/rest/fixed-on-loom.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 import { PLAIN_PIECE, pieceWith, planOf } from '../a-piece.ts';
 
@@ -150,6 +151,6 @@ test('the further one is, the less is left', () => {
       if (!before.ok || !after.ok) return !after.ok;
       return Object.entries(after.value.yarns).every(([role, { netMm }]) => netMm <= (before.value.yarns[role]?.netMm ?? 0) + 1e-6) && after.value.hours.likely <= before.value.hours.likely;
     }),
-    { numRuns: 1000, seed: 20261001 },
+    { numRuns: cases(1000), seed: 20261001 },
   );
 });

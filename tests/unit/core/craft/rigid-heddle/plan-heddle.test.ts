@@ -7,6 +7,7 @@ import { CRAFTS } from '#core/craft/crafts.ts';
 import { pickGeometry, pickLength } from '#core/craft/picks.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { HeddlePiece, HeddlePlan } from '#core/craft/rigid-heddle/piece.ts';
+import { cases } from '../../../../support/random-cases.ts';
 
 const SCARF: HeddlePiece = CRAFTS['rigid-heddle'].example;
 function planOf(piece: HeddlePiece): HeddlePlan {
@@ -65,12 +66,12 @@ describe('a cloth on a rigid heddle', () => {
       expect(all({ ...SCARF, size: { widthMm, lengthMm: lengthMm * more } })).toBeGreaterThanOrEqual(before - 1e-6);
       expect(all({ ...piece, allowances: { ...SCARF.allowances, takeUp: 0.2 } })).toBeGreaterThanOrEqual(before);
       expect(all({ ...SCARF, size: { widthMm: (widthMm / 25.4) * 25.4, lengthMm: (lengthMm / 25.4) * 25.4 } })).toBeCloseTo(before, 3);
-    }), { numRuns: 1000 });
+    }), { numRuns: cases(1000) });
   });
 
   test('nothing a person may send makes it throw', () => {
     fc.assert(fc.property(fc.jsonValue({ maxDepth: 4 }), fc.constantFrom('size', 'heddle', 'yarns', 'picksPerCm', 'pieces', 'allowances'), (nonsense, key) => {
       expect(() => planPiece({ ...SCARF, [key]: nonsense })).not.toThrow();
-    }), { numRuns: 1500 });
+    }), { numRuns: cases(1500) });
   });
 });

@@ -3,6 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { fitPiece } from '#core/craft/fit.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { mergeShopping, type Shopping } from '#core/craft/shopping/merge-shopping.ts';
+import { cases } from '../../../../support/random-cases.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 import { pieceWith, planOf } from '../a-piece.ts';
 
@@ -92,6 +93,6 @@ test('the total of a merged list is the sum of its pieces, and never more balls 
       expect(yarns.reduce((mm, { withMarginMm }) => mm + withMarginMm, 0)).toBeCloseTo(sum, 3);
       expect(yarns.reduce((count, one) => count + (one.balls?.count ?? 0), 0)).toBeLessThanOrEqual(balls);
     }),
-    { numRuns: 1000, seed: 20261101 },
+    { numRuns: cases(1000), seed: 20261101 },
   );
 });

@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { areasOfRow, longestSlitRows, placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
+import { areasOfRow, isSymmetric, longestSlitRows, placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
 import { TECHNIQUE_NAMES, TECHNIQUES } from '#core/craft/techniques/registry.ts';
 import { picksOn, threadOn, type DressedLoom } from '#core/craft/techniques/technique.ts';
 
@@ -68,4 +68,13 @@ describe('colours in a row', () => {
     const { rows } = placeShape({ shape: 'rectangle', yarn: 'red', baseMm: 50, heightMm: 40, bottomMm: 30 }, grid);
     expect(rows).toHaveLength(5);
   });
+});
+
+test('a shape steps alike on both sides unless it leans or is asked to step otherwise', () => {
+  const shape = { shape: 'triangle', yarn: 'red', baseMm: 60, heightMm: 40 } as const;
+  expect(isSymmetric(shape)).toBe(true);
+  expect(isSymmetric({ ...shape, leanMm: 0 })).toBe(true);
+  expect(isSymmetric({ ...shape, leanMm: -10 })).toBe(false);
+  expect(isSymmetric({ ...shape, symmetric: false })).toBe(false);
+  expect(isSymmetric({ ...shape, leanMm: 10, symmetric: true })).toBe(true);
 });
