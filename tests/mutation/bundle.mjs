@@ -25,4 +25,6 @@ await build({
   platform: 'node',
   target: 'node20',
   external: ['mathjs'],
+  // For packages that ask for Node's own modules in the old way.
+  banner: { js: "import { createRequire } from 'node:module'; const require = createRequire(import.meta.url);" },
 });

@@ -40,6 +40,10 @@ export const CODE_WORDS = {
   W_UNUSED: { title: 'A yarn nothing is woven with', means: 'The piece has a yarn that none of its bands names.', toDo: 'Take it out, or weave a band with it.' },
   W_DOWEL: { title: 'The dowel does not suit', means: 'It is too thin for the weight of the piece or too short for its width.', toDo: 'Take the thickness or the length that is named.' },
   W_RULE: { title: 'Knots and the old rule disagree', means: 'Knot by knot the cords come to another length than four times what they hang.', toDo: 'Knot ten of your own knots, measure what they took, and say so.' },
+  W_TANNIN: { title: 'No tannin for cotton or linen', means: 'Aluminium acetate holds better on these fibres after a bath of tannin.', toDo: 'Add a bath of tannin, or expect a paler colour.' },
+  W_FIBRE: { title: 'Not meant for this fibre', means: 'Tannin and aluminium acetate are for cotton and linen; wool and silk take alum.', toDo: 'Choose the fibre you dye, or take alum.' },
+  W_HIGH: { title: 'More than the fibre holds', means: 'What the fibre cannot hold stays in the bath, or makes the wool sticky.', toDo: 'Take less. Do away with what is left as your local rules say.' },
+  W_FIBRE_DAMAGE: { title: 'So much iron harms the fibre', means: 'Iron darkens colours, and too much of it makes fibre harsh and brittle.', toDo: 'Take the share of iron that is named, and rinse well.' },
 } as const satisfies Readonly<Record<ErrorCode, CodeWords>> & Readonly<Record<WarningCode, CodeWords>>;
 
 export type Code = keyof typeof CODE_WORDS;

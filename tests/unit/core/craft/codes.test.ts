@@ -19,6 +19,7 @@ const CODES = Object.keys(CODE_WORDS) as Code[];
 const plan = (parts: object): readonly Problem[] => told(planPiece({ ...PLAIN_PIECE, ...parts }));
 const ground = (yarn: object): readonly Problem[] => plan({ yarns: { ground: yarn } });
 const bands = (...first: object[]): readonly Problem[] => plan({ bands: [...first, ...PLAIN_PIECE.bands] });
+const dye = (parts: object): readonly Problem[] => told(planPiece({ craft: 'dyeing', fibre: { kind: 'wool', massG: 250 }, mordant: { agent: 'alum' }, dye: { percent: 100 }, ...parts }));
 const WARP = PLAIN_PIECE.warp;
 
 /** For each code something a person may well say that brings it about. */
@@ -50,6 +51,10 @@ const PROVOKED: Readonly<Record<Code, () => readonly Problem[]>> = {
   W_ROOM: () => told(planRest(pieceOf({ technique: 'tabby', yarn: 'ground', heightMm: 399 }), { bandsDone: 1, heightMm: 430 })),
   W_FRINGE: () => plan({ finish: { bottom: 'twisted', fringeMm: 120 }, allowances: { bottomMm: 80 }, loom: { ...PLAIN_PIECE.loom, insideHeightMm: 700 } }),
   W_RULE: () => told(planPiece(hangingOf([{ technique: 'square-knots', knots: 10, gapMm: 100 }]))),
+  W_TANNIN: () => dye({ fibre: { kind: 'cotton', massG: 200 }, mordant: { agent: 'aluminium-acetate' } }),
+  W_FIBRE: () => dye({ tannin: {} }),
+  W_HIGH: () => dye({ mordant: { agent: 'alum', percent: 31 } }),
+  W_FIBRE_DAMAGE: () => dye({ iron: { percent: 5 } }),
   W_UNUSED: () => plan({ yarns: { ground: { metresPer100g: 180 }, lost: { tex: 400 } } }),
   W_DOWEL: () => plan({ dowel: { diameterMm: 2, lengthMm: 380 } }),
 };
