@@ -1,5 +1,6 @@
 /** What the pages of the shop say of a series, from its data. */
 import { firstName } from '#core/following/opening-words.ts';
+import { listed } from '#core/listed.ts';
 import type { PartFor, SeriesFor } from '#server/queries/series/series-for.ts';
 
 /** What a student should bring along. */
@@ -17,10 +18,6 @@ export function minutesWords(minutes: number): string {
   if (minutes < 60) return `${minutes}\u00a0min`;
   const rest = minutes % 60;
   return `${Math.floor(minutes / 60)}\u00a0h${rest === 0 ? '' : `\u00a0${String(rest).padStart(2, '0')}`}`;
-}
-
-function listed(words: readonly string[], last: string): string {
-  return words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} ${last} ${words.at(-1) ?? ''}`;
 }
 
 /** `Wren Okafor helps at the bench.`; empty without helpers. */

@@ -5,6 +5,7 @@ import type { Material } from '#core/craft/craft.ts';
 import { craftOf, type Piece } from '#core/craft/crafts.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
 import type { Yarn } from '#core/craft/piece.ts';
+import { listed } from '#core/listed.ts';
 import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -134,10 +135,9 @@ export function partsWords(parts: readonly number[], untilPart: number | null): 
     else runs.push([part]);
   }
   const words = runs.flatMap((run) => (run.length > 2 ? [`${run[0] ?? ''} to ${run.at(-1) ?? ''}`] : run.map(String)));
-  const listed = words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;
   const last = Math.max(...parts);
   const kept = untilPart !== null && untilPart > last ? `, kept until Part ${untilPart}` : '';
-  return `${parts.length === 1 ? 'Part' : 'Parts'} ${listed}${kept}`;
+  return `${parts.length === 1 ? 'Part' : 'Parts'} ${listed(words)}${kept}`;
 }
 
 export interface YarnSum {

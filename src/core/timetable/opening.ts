@@ -56,20 +56,26 @@ function changeBetween(clock: IANAZone, from: number, to: number): number {
   return after;
 }
 
-/** Whether a part with `rule` is open to the student of `facts`, and if not, what it waits for. */
-export function standingOf(rule: OpeningRule, facts: SeatFacts): Standing {
+/**
+ * The moment at which a part with `rule` opens to one seat; null while it waits for a verdict. `wovenOnAt` tells by public
+ * id of a lesson when its checkpoint had the verdict *weave on*. A date that is none counts as open from the start.
+ */
+export function openingMoment(rule: OpeningRule, seat: { readonly seatStartedAt: Date; readonly wovenOnAt: ReadonlyMap<string, Date> }): Date | null {
   switch (rule.rule) {
     case 'at-once':
-      return { open: true };
-    case 'on-date': {
-      const opensAt = instantOfWall(rule.wall, rule.zone);
-      return opensAt === null || opensAt <= facts.now ? { open: true } : { open: false, until: 'date', opensAt };
-    }
-    case 'after-seat': {
-      const opensAt = new Date(facts.seatStartedAt.getTime() + rule.days * DAY_MS);
-      return opensAt <= facts.now ? { open: true } : { open: false, until: 'date', opensAt };
-    }
+      return seat.seatStartedAt;
+    case 'on-date':
+      return instantOfWall(rule.wall, rule.zone) ?? seat.seatStartedAt;
+    case 'after-seat':
+      return new Date(seat.seatStartedAt.getTime() + rule.days * DAY_MS);
     case 'after-verdict':
-      return facts.wovenOn.has(rule.lesson) ? { open: true } : { open: false, until: 'verdict', lesson: rule.lesson };
+      return seat.wovenOnAt.get(rule.lesson) ?? null;
   }
+}
+
+/** Whether a part with `rule` is open to the student of `facts`, and if not, what it waits for. */
+export function standingOf(rule: OpeningRule, { seatStartedAt, wovenOn, now }: SeatFacts): Standing {
+  if (rule.rule === 'after-verdict') return wovenOn.has(rule.lesson) ? { open: true } : { open: false, until: 'verdict', lesson: rule.lesson };
+  const opensAt = openingMoment(rule, { seatStartedAt, wovenOnAt: new Map() });
+  return opensAt === null || rule.rule === 'at-once' || opensAt <= now ? { open: true } : { open: false, until: 'date', opensAt };
 }

@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { id, maybeRef, moment, oneOf, publicId, ref } from '#server/db/columns.ts';
+import { id, maybeMoment, maybeRef, moment, oneOf, publicId, ref } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /** A seat: the right of one person to one series. */
@@ -12,6 +12,8 @@ export class Enrolment extends Model<InferAttributes<Enrolment>, InferCreationAt
   declare source: 'bought' | 'gift' | 'granted';
   declare state: CreationOptional<'active' | 'closed'>;
   declare startedAt: Date;
+  /** When it was first looked at which parts are open; what opened later is told. */
+  declare openingsBegunAt: CreationOptional<Date | null>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -25,6 +27,7 @@ Enrolment.init({
   source: oneOf(['bought', 'gift', 'granted']),
   state: oneOf(['active', 'closed'], 'active'),
   startedAt: moment(),
+  openingsBegunAt: maybeMoment(),
   createdAt: moment(),
   updatedAt: moment(),
 }, { sequelize, tableName: 'enrolments' });

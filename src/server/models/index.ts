@@ -12,6 +12,7 @@ export { Mail } from './mail.ts';
 export { Media } from './media.ts';
 export { MyPieceRow } from './my-piece.ts';
 export { Order } from './order.ts';
+export { PartOpening } from './part-opening.ts';
 export { PatternPiece } from './piece.ts';
 export { PaymentEvent } from './payment-event.ts';
 export { PhotoNote } from './photo-note.ts';

@@ -37,7 +37,7 @@ describe('a verdict', () => {
     await giveVerdict(await contextFor(all.teacher), says(photo, { verdict: 'weave-on' }));
     expect((await seriesFor(maud, all.series.slug, now))?.parts[1]?.access).toEqual({ may: 'follow' });
     const letters = await Mail.findAll();
-    expect(letters.map(({ template, toAddress, data }) => [template, toAddress, data['openedPart']])).toEqual([['verdict', all.student.email, 2]]);
+    expect(letters.map(({ template, toAddress, data }) => [template, toAddress, data['openedParts']])).toEqual([['verdict', all.student.email, [2]]]);
   });
 
   test('mend first keeps the next part shut, keeps the pins, and a second photo goes on in the same thread', async () => {

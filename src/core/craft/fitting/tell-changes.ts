@@ -6,6 +6,7 @@ import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { lengthOf, type LengthUse } from '#core/craft/amounts/amount-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { loomKind } from '#core/craft/looms/looms.ts';
+import { listed } from '#core/listed.ts';
 import type { Units } from '#core/units/units.ts';
 
 export interface Made {
@@ -23,11 +24,6 @@ const ordinal = (place: number): string => ORDINALS[place - 1] ?? `${String(plac
 /** `dark shore`, or `the third band` for one without a name. */
 export function bandWords(band: { readonly name?: string }, index: number): string {
   return band.name === undefined ? `the ${ordinal(index + 1)} band` : band.name.replaceAll('-', ' ');
-}
-
-/** `a, b and c` */
-export function listed(words: readonly string[]): string {
-  return words.length < 2 ? words.join('') : `${words.slice(0, -1).join(', ')} and ${words.at(-1) ?? ''}`;
 }
 
 function nailWords({ loom }: FrameLoomPiece): string {

@@ -3,12 +3,14 @@ import type { z } from 'astro/zod';
 import { verdict } from './bench.ts';
 import { seatBought, seatRefused } from './checkout.ts';
 import { workroomOpened } from './office.ts';
+import { partsOpened } from './openings.ts';
 import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
 
 export const TEMPLATES = {
   'account-exists': accountExists,
   'confirm-address': confirmAddress,
   'new-password': newPassword,
+  'parts-opened': partsOpened,
   'password-changed': passwordChanged,
   'seat-bought': seatBought,
   'seat-refused': seatRefused,

@@ -1,10 +1,11 @@
+import { Op } from 'sequelize';
 import type { VerdictInput } from '#contracts/bench.ts';
 import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize, found } from '#server/errors.ts';
 import { postLetter } from '#server/mail/outbox.ts';
-import { Enrolment, Lesson, PhotoNote, ProgressPhoto, Series, User } from '#server/models/index.ts';
+import { Enrolment, Lesson, PartOpening, PhotoNote, ProgressPhoto, Series, User } from '#server/models/index.ts';
 import { maySitAtBench } from '#server/policies/workroom.ts';
 
 /**
@@ -38,9 +39,9 @@ async function answeredAlready(photo: ProgressPhoto): Promise<AppError> {
 async function tellStudent(told: { photo: ProgressPhoto; enrolment: Enrolment; series: Series; teacherName: string; input: VerdictInput }): Promise<void> {
   const { photo, enrolment, series, teacherName, input } = told;
   const student = found(await User.findByPk(enrolment.userId));
-  const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] });
+  const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null, publishedVersionId: { [Op.ne]: null } }, order: ['position', 'id'] });
   const partNumber = lessons.findIndex(({ id }) => id === photo.lessonId) + 1;
-  const opened = lessons.findIndex(({ opens }) => opens.rule === 'after-verdict' && opens.lesson === lessons[partNumber - 1]?.publicId) + 1;
+  const opened = input.verdict === 'weave-on' ? await openedBy(photo, lessons) : [];
   await postLetter({
     template: 'verdict',
     dedupeKey: `verdict:${photo.publicId}`,
@@ -53,7 +54,15 @@ async function tellStudent(told: { photo: ProgressPhoto; enrolment: Enrolment; s
       verdict: input.verdict,
       words: input.words,
       notes: input.notes.map(({ words }) => words),
-      openedPart: input.verdict === 'weave-on' && opened > 0 ? opened : null,
+      openedParts: opened.map((lesson) => lessons.indexOf(lesson) + 1),
     },
   });
+}
+
+/** The parts that waited for this verdict. They are put on record as told, so that no second letter says they are open. */
+async function openedBy({ enrolmentId, lessonId, verdictAt }: ProgressPhoto, lessons: readonly Lesson[]): Promise<Lesson[]> {
+  const shown = lessons.find(({ id }) => id === lessonId);
+  const opened = lessons.filter(({ opens, isPreview }) => !isPreview && opens.rule === 'after-verdict' && opens.lesson === shown?.publicId);
+  await PartOpening.bulkCreate(opened.map(({ id }) => ({ enrolmentId, lessonId: id, toldBy: 'verdict' as const, openedAt: verdictAt ?? new Date() })), { ignoreDuplicates: true });
+  return opened;
 }
