@@ -43,6 +43,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
   '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
   '/api/ticks': [{ at: '/api/ticks', post: true, answers: '401 422 422 422 422 422 422' }],
+  '/api/video-place': [{ at: '/api/video-place', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/videos/[...upload]': [{ at: '/api/videos', post: true, answers: '401 403 403 412 412 403 403' }],
   '/confirm/[token]': [{ at: '/confirm/nothing', answers: '410' }],
   '/forgotten': [{ at: '/forgotten', answers: EVERYBODY }],

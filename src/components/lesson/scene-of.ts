@@ -7,7 +7,7 @@ import type { Plan } from '#core/craft/crafts.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import type { LessonScene, SceneAmount, SceneFigure, ScenePicture, SceneVideo, StepForm } from './scene.ts';
+import { sceneEntry, type LessonScene, type SceneAmount, type SceneFigure, type ScenePicture, type SceneVideo, type StepForm } from './scene.ts';
 
 export interface SceneSources {
   readonly facts: LessonFacts;
@@ -15,6 +15,8 @@ export interface SceneSources {
   readonly piece?: { readonly piece: Piece; readonly plan: Plan };
   readonly units: Units;
   readonly media: readonly SeriesMediaFile[];
+  /** Where she stopped in videos, by their names. */
+  readonly places?: Readonly<Record<string, { readonly placeMs: number; readonly furthestMs: number }>>;
   readonly ticked: Iterable<string>;
   readonly stepForm?: StepForm;
 }
@@ -27,7 +29,7 @@ export function sceneOf(sources: SceneSources): LessonScene {
     figures: figuresOf(sources),
     ...(facts.figures.length > 0 && sources.piece !== undefined && { figuresOf: { piece: sources.piece.piece, plan: sources.piece.plan, units: sources.units } }),
     pictures: entries(namesOf(facts, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
-    videos: entries(namesOf(facts, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name))),
+    videos: entries(namesOf(facts, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name), sceneEntry(sources.places ?? {}, name))),
     ticked: new Set(ticked),
     ...(stepForm === undefined ? {} : { stepForm }),
   };
@@ -72,7 +74,7 @@ function pictureOf(media: SeriesMediaFile | undefined): ScenePicture | undefined
   return { src: addressOf(media, 'large'), width: large.width, height: large.height };
 }
 
-function videoOf(media: SeriesMediaFile | undefined): SceneVideo | undefined {
+function videoOf(media: SeriesMediaFile | undefined, place: SceneVideo['place']): SceneVideo | undefined {
   const video = media?.files['video'];
   if (media === undefined || video === undefined) return undefined;
   const { poster = 'poster', cues = [], chapters = [] } = media.detail;
@@ -85,6 +87,7 @@ function videoOf(media: SeriesMediaFile | undefined): SceneVideo | undefined {
     ...(cues.length === 0 ? {} : { captions: addressOf(media, media.isDraft ? 'captions-draft' : 'captions') }),
     chapters,
     cues,
+    ...(place === undefined ? {} : { place }),
   };
 }
 

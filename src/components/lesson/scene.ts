@@ -40,6 +40,8 @@ export interface SceneVideo {
   readonly captions?: string;
   readonly chapters: readonly Chapter[];
   readonly cues: readonly Cue[];
+  /** Where she stopped, and how far she ever was. */
+  readonly place?: { readonly placeMs: number; readonly furthestMs: number };
 }
 
 /** Where a tick is sent; without it (a preview, a draft) steps are drawn without a box to tick. */

@@ -48,7 +48,6 @@ export function CueEditor({ video, src, poster, title, durationMs, revision, cue
     else return;
     event.preventDefault();
   };
-  const off = inHand === null ? 'Choose a line first.' : undefined;
   return (
     // The keys work from anywhere within; each has a button too.
     <div className="cue-editor" onKeyDown={onKeyDown}>
@@ -56,8 +55,8 @@ export function CueEditor({ video, src, poster, title, durationMs, revision, cue
         <div className="video"><video ref={film} controls playsInline preload="metadata" src={src} poster={poster} aria-label={`Film: ${title}`} onTimeUpdate={() => setPlaying(cueAt(state.lines, place()))} /></div>
         <p className="row mt-3">
           <Button glyph="plus" onClick={add}>Write a line here</Button>
-          <Button off={off} aria-keyshortcuts="[" onClick={() => tell({ kind: 'mark-in', atMs: place() })}>It begins here <kbd>[</kbd></Button>
-          <Button off={off} aria-keyshortcuts="]" onClick={() => tell({ kind: 'mark-out', atMs: place() })}>It ends here <kbd>]</kbd></Button>
+          <Button aria-keyshortcuts="[" onClick={() => tell({ kind: 'mark-in', atMs: place() })}>It begins here <kbd>[</kbd></Button>
+          <Button aria-keyshortcuts="]" onClick={() => tell({ kind: 'mark-out', atMs: place() })}>It ends here <kbd>]</kbd></Button>
         </p>
         <p className="row mt-2">
           <Button small glyph="undo" off={state.before.length === 0 ? 'Nothing was changed yet.' : undefined} onClick={() => tell({ kind: 'undo' })}>Undo</Button>
@@ -71,7 +70,7 @@ export function CueEditor({ video, src, poster, title, durationMs, revision, cue
             <p className="row mt-2"><Button onClick={() => tell({ kind: 'keep-mine' })}>Keep mine</Button><Button kind="quiet" onClick={() => tell({ kind: 'take-theirs' })}>Take the others</Button></p>
           </Notice>
         )}
-        <details className="mt-3 small"><summary>Keys</summary><p><kbd>[</kbd> and <kbd>]</kbd> mark where the line in hand begins and ends; with <kbd>Alt</kbd> also while you write. <kbd>Enter</kbd> in a line begins the next one at the place that plays.</p></details>
+        <details className="mt-3 small"><summary>Keys</summary><p><kbd>[</kbd> and <kbd>]</kbd> mark where the line in hand, or the one that plays, begins and ends; with <kbd>Alt</kbd> also while you write. <kbd>Enter</kbd> in a line begins the next one at the place that plays.</p></details>
       </div>
       <ol ref={list} className="cue-list" role="list" aria-label="Lines of the captions">
         {state.lines.map((line, at) => <CueRow key={line.key} line={line} fault={faults.get(line.key)} isInHand={line.key === inHand} isPlaying={at === playing} tell={tell} jump={jump} />)}

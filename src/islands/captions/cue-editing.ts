@@ -2,6 +2,7 @@
 import { captionFaults } from '#core/captions/caption-faults.ts';
 import type { Cue } from '#core/captions/cues.ts';
 import { inOrder, shiftCues } from '#core/captions/shift-cues.ts';
+import { cueAt } from '#core/captions/transcript.ts';
 
 /** A line with a name of its own, which it keeps while it is moved and written. */
 export interface EditLine extends Cue {
@@ -55,9 +56,9 @@ export function cueEditingAfter(state: CueEditing, event: CueEvent): CueEditing 
     case 'add':
       return added(state, event.atMs);
     case 'mark-in':
-      return marked(state, ({ toMs }) => ({ fromMs: event.atMs, toMs: Math.max(toMs, event.atMs + LEAST_MS) }));
+      return marked(state, event.atMs, ({ toMs }) => ({ fromMs: event.atMs, toMs: Math.max(toMs, event.atMs + LEAST_MS) }));
     case 'mark-out':
-      return marked(state, ({ fromMs }) => ({ toMs: Math.max(event.atMs, fromMs + LEAST_MS) }));
+      return marked(state, event.atMs, ({ fromMs }) => ({ toMs: Math.max(event.atMs, fromMs + LEAST_MS) }));
     case 'take-out':
       return { ...changed(state, state.lines.filter(({ key }) => key !== event.key)), inHand: null };
     case 'shift':
@@ -104,8 +105,10 @@ function inLineOrder(lines: readonly EditLine[]): EditLine[] {
   return [...lines].sort((a, b) => a.fromMs - b.fromMs || a.key - b.key);
 }
 
-function marked(state: CueEditing, change: (line: EditLine) => Partial<Cue>): CueEditing {
-  return state.inHand === null ? state : changed(state, ofLine(state, state.inHand, change));
+/** Without a line in hand the one that plays is marked. */
+function marked(state: CueEditing, atMs: number, change: (line: EditLine) => Partial<Cue>): CueEditing {
+  const key = state.inHand ?? state.lines[cueAt(state.lines, atMs)]?.key;
+  return key === undefined ? state : { ...changed(state, ofLine(state, key, change)), inHand: key };
 }
 
 /** A new line ends where the next one begins, when there is room. */

@@ -9,8 +9,8 @@ interface LiveLessonProps {
 }
 
 /**
- * Takes over what the page under it can do by itself: the small forms of the steps answer at once, and a chapter of a
- * video begins in its place. Draws nothing but the words that say where a tick is kept.
+ * Takes over what the page under it can do by itself: the small forms of the steps answer at once. Draws nothing but the
+ * words that say where a tick is kept.
  */
 export function LiveLesson({ seat, series, lesson }: LiveLessonProps) {
   const [words, setWords] = useState('');
@@ -39,26 +39,11 @@ export function LiveLesson({ seat, series, lesson }: LiveLessonProps) {
     };
     const stop = queue.subscribe(onQueue);
     document.addEventListener('submit', onSubmit);
-    document.addEventListener('click', beginChapter);
     void queue.flush();
     return () => {
       stop();
       document.removeEventListener('submit', onSubmit);
-      document.removeEventListener('click', beginChapter);
     };
   }, [seat, series, lesson]);
   return <p className="kept-steps small" role="status">{words}</p>;
-}
-
-/** A chapter's link leads to the file at its time; with script the video above goes there instead. */
-function beginChapter(event: MouseEvent): void {
-  const link = event.target instanceof Element ? event.target.closest<HTMLAnchorElement>('.lesson-video .chapter-list a') : null;
-  const video = link?.closest('.lesson-video')?.querySelector('video');
-  const at = /#t=(\d+)$/.exec(link?.href ?? '')?.[1];
-  if (!(video instanceof HTMLVideoElement) || at === undefined) return;
-  event.preventDefault();
-  video.currentTime = Number(at);
-  // Refused where the browser wants a press on the video itself: it stands at the place all the same.
-  void video.play().catch(() => undefined);
-  video.focus();
 }

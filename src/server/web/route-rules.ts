@@ -32,6 +32,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/openapi.json': 'machine',
   '/api/reckon': 'machine',
   '/api/ticks': 'signed-in',
+  '/api/video-place': 'signed-in',
   '/api/videos/[...upload]': 'teacher',
   '/api/workroom/lesson-check': 'teacher',
   '/api/workroom/lesson-draft': 'teacher',

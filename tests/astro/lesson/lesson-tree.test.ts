@@ -1,3 +1,4 @@
+import react from '@astrojs/react/server.js';
 import { experimental_AstroContainer as AstroContainer } from 'astro/container';
 import { JSDOM } from 'jsdom';
 import { beforeAll, describe, expect, test } from 'vitest';
@@ -16,6 +17,8 @@ const bare: LessonScene = { amounts: {}, figures: {}, pictures: {}, videos: {}, 
 let container: AstroContainer;
 beforeAll(async () => {
   container = await AstroContainer.create();
+  container.addServerRenderer({ name: '@astrojs/react', renderer: react });
+  container.addClientRenderer({ name: '@astrojs/react', entrypoint: '@astrojs/react/client.js' });
 });
 
 async function drawTree(tree: unknown, scene: Partial<LessonScene> = {}): Promise<Document> {
@@ -135,7 +138,7 @@ describe('parts', () => {
     });
     expect(page.querySelector('video[controls][preload=metadata] > track[kind=captions][default]')?.getAttribute('src')).toBe('/media/v/captions');
     expect([...page.querySelectorAll('.chapter-list a')].map((link) => [link.getAttribute('href'), textOf(link)])).toEqual([['/media/v/video#t=0', '0:00First'], ['/media/v/video#t=3725', '1:02:05Last']]);
-    expect(textOf(page.querySelector('details p'))).toBe('Lay it down. Wind.');
+    expect(textOf(page.querySelector('details section'))).toBe('FirstLay it down. Wind.');
   });
 });
 
