@@ -11,7 +11,7 @@ const CARDS = [
 const PEOPLE = [
   ['ilse@saltmarsh.example', 'teacher, Low Tide is hers', '/workroom'],
   ['wren@saltmarsh.example', 'helps Ilse at the bench', '/workroom/bench'],
-  ['teodor@cordage.example', 'teacher, his series is still a draft', '/workroom'],
+  ['teodor@cordage.example', 'teacher, Three Knotted Cords is his', '/workroom'],
   ['maud@weavers.example', 'student in part 2, her photo waits', '/loom'],
   ['jonas@weavers.example', 'student, nothing done yet', '/loom'],
   ['amara@weavers.example', 'has no seat yet', '/series/low-tide'],

@@ -126,7 +126,42 @@ const PIECES: readonly WireRow[] = [
   { row: 'shrinking is divided out', source: 'Conference of Northern California Handweavers', question: piece({ size: { widthMm: 300, heightMm: 254 }, loom: { ...workedPiece.loom, insideHeightMm: 800 }, allowances: { ...workedPiece.allowances, relaxation: 0, wetShrinkage: 0.2 }, bands: [{ technique: 'tabby', yarn: 'A', fill: true }] }), numbers: { '/loom/heightOnLoomMm': 317.5 } },
 ];
 
-export const WIRE_ROWS: readonly WireRow[] = [...YARNS, ...TAKE_UP, ...STITCHES, ...TEXTS, ...PIECES];
+const BRAID = { craft: 'macrame', rod: { kind: 'rod', diameterMm: 20 }, yarns: { main: { diameterMm: 3 } }, columns: [{ name: 'braid', yarn: 'main', cords: 2, sections: [{ technique: 'square-knots', heightMm: 900 }] }] };
+const knotted = (changed: object): unknown => ({ what: 'piece', piece: { ...BRAID, ...changed } });
+const WOOL = { craft: 'dyeing', fibre: { kind: 'wool', massG: 250 }, mordant: { agent: 'alum' }, tartar: {}, dye: { percent: 100 }, iron: {} };
+const dyed = (changed: object): unknown => ({ what: 'piece', piece: { ...WOOL, ...changed } });
+const SCARF = {
+  craft: 'rigid-heddle', size: { widthMm: 200, lengthMm: 1500 }, heddle: { spacingMm: 2.54 }, picksPerCm: 4, yarns: { warp: { tex: 250 }, weft: { tex: 250 } },
+  allowances: { drawIn: 0.08, widthShrinkage: 0.05, lengthShrinkage: 0.05, takeUp: 0.1, fringeMm: 200 },
+};
+const heddled = (changed: object): unknown => ({ what: 'piece', piece: { ...SCARF, ...changed } });
+
+const OTHER_CRAFTS: readonly WireRow[] = [
+  {
+    row: 'a braid of 86 square knots: a lark’s head of 2π·26 mm, twice 86·48 mm and a tail', source: 'derived; 16 and 3.5 diameters a knot, common practice, no source',
+    question: knotted({}), numbers: { '/heightMm': 903, '/knots': 86, '/ends': 4, '/columns/0/cutMm': 8519.362818, '/columns/0/ruleMm': 7224, '/yarns/main/netMm': 17038.725636, '/yarns/main/withMarginMm': 18742.5982, '/rod/lengthMm': 93.8 },
+  },
+  { row: 'square knots on five cords', source: 'a square knot is tied with four ends', question: knotted({ columns: [{ yarn: 'main', cords: 5, sections: [{ technique: 'square-knots', knots: 3 }] }] }), refused: ['E_PARITY /piece/columns/0/cords'] },
+  { row: 'cord of no thickness', source: 'definition', question: knotted({ yarns: { main: { diameterMm: 0 } } }), refused: ['E_RANGE /piece/yarns/main/diameterMm'] },
+  {
+    row: '250 g of wool with alum, tartar, weld and iron', source: 'percentages of published recipes; 30 litres a kilogram, common practice, no source', question: dyed({}),
+    numbers: { '/bathLitres': 7.5, '/steps/1/agents/0/massG': 37.5, '/steps/1/agents/1/massG': 15, '/steps/2/agents/0/massG': 250, '/steps/3/agents/0/massG': 5, '/hours/likely': 3 },
+  },
+  { row: 'cotton without tannin', source: 'published recipes', question: dyed({ fibre: { kind: 'cotton', massG: 100 }, mordant: { agent: 'aluminium-acetate' }, tartar: undefined }), numbers: { '/steps/1/agents/0/massG': 8 }, warnings: ['W_TANNIN'] },
+  { row: 'chrome is not given', source: 'poisonous to people and waters', question: dyed({ mordant: { agent: 'chrome' } }), refused: ['E_ENUM /piece/mordant/agent'] },
+  {
+    row: 'a scarf at ten to the inch: 200/0.92/0.95/2.54 ends of 1500/0.95/0.9 + 200 + 610 mm', source: DERIVED, question: heddled({}),
+    numbers: { '/ends/raw': 90.091713, '/ends/count': 90, '/ends/widthInHeddleMm': 228.832952, '/warpEndMm': 2564.385965, '/picks': 600, '/yarns/warp/netMm': 230794.736842, '/yarns/warp/massG': 57.698684 },
+  },
+  {
+    row: '84 ends of 68 inches, where the book lists 160 yards', source: 'a rigid-heddle project book, rug',
+    question: heddled({ size: { widthMm: 533.4, lengthMm: 1016 }, heddle: { spacingMm: 6.35 }, allowances: { drawIn: 0, widthShrinkage: 0, lengthShrinkage: 0, takeUp: 0, fringeMm: 101.6, wasteMm: 609.6 } }), numbers: { '/ends/count': 84, '/warpEndMm': 1727.2, '/yarns/warp/netMm': 145084.8 },
+  },
+  { row: 'a heddle too narrow', source: DERIVED, question: heddled({ heddle: { spacingMm: 2.54, widthMm: 228 } }), refused: ['E_FIT /piece/heddle/widthMm'] },
+  { row: 'a craft nobody knows', source: 'definition', question: { what: 'piece', piece: { ...WOOL, craft: 'pottery' } }, refused: ['E_ENUM /piece/craft'] },
+];
+
+export const WIRE_ROWS: readonly WireRow[] = [...YARNS, ...TAKE_UP, ...STITCHES, ...TEXTS, ...PIECES, ...OTHER_CRAFTS];
 
 /** The value at a JSON pointer. */
 export function at(answer: unknown, pointer: string): unknown {

@@ -35,10 +35,10 @@ export interface Choice { readonly value: string; readonly label: string }
 const any = (label: string): Choice => ({ value: '', label });
 
 /** The choices of each filter; what no open series has is not offered, but for what was chosen already. */
-export function choicesOf(choices: ShopChoices, chosen: { readonly technique?: string | undefined }): Record<'craft' | 'technique' | 'loom' | 'hours' | 'level' | 'price', readonly Choice[]> {
+export function choicesOf(choices: ShopChoices, chosen: { readonly craft?: string | undefined; readonly technique?: string | undefined }): Record<'craft' | 'technique' | 'loom' | 'hours' | 'level' | 'price', readonly Choice[]> {
   const techniques = chosen.technique === undefined || choices.techniques.includes(chosen.technique) ? choices.techniques : [...choices.techniques, chosen.technique];
   return {
-    craft: [any('Any craft'), ...CRAFT_NAMES.map((value) => ({ value, label: CRAFTS[value].words.label }))],
+    craft: [any('Any craft'), ...CRAFT_NAMES.filter((value) => choices.crafts.includes(value) || value === chosen.craft).map((value) => ({ value, label: CRAFTS[value].words.label }))],
     technique: [any('Any'), ...techniques.map((value) => ({ value, label: value }))],
     loom: [any('Any loom'), ...LOOMS.map((value) => ({ value, label: value === 'none' ? 'No loom' : `${value}\u00a0cm inside` }))],
     hours: [any('Any'), ...HOURS.map((value) => ({ value, label: `Up to ${value}` }))],

@@ -3,10 +3,9 @@
  * own checks, which speak a weaver's language; this says the same in schemas, and tests hold
  * the two together from both sides, at every limit.
  */
-import { PIECE_SCHEMAS } from '#contracts/reckon-api/piece-schemas.ts';
-import { PLAN_SCHEMAS } from '#contracts/reckon-api/plan-schemas.ts';
+import { CRAFT_SCHEMAS } from '#contracts/reckon-api/craft-schemas.ts';
 import { QUESTION_SCHEMAS } from '#contracts/reckon-api/question-schemas.ts';
-import { closed, list, ref, text, type Schema } from '#contracts/reckon-api/schema.ts';
+import { closed, list, ref, text, toldBy, type Schema } from '#contracts/reckon-api/schema.ts';
 import { YARN_SCHEMAS } from '#contracts/reckon-api/yarn-schemas.ts';
 import type { Question } from '#core/craft/reckon.ts';
 
@@ -49,6 +48,7 @@ const EXAMPLES: Readonly<Record<string, { readonly summary: string; readonly val
   takeUp: { summary: 'Weft on straight warp', value: { what: 'take-up', warpDiameterMm: 0.8, weftDiameterMm: 1, warpSpacingMm: 5, weftSpacingMm: 1.45 } },
   soumak: { summary: 'Over four, back under two', value: { what: 'soumak', over: 4, back: 2, spacingMm: 5, diameterSumMm: 4.2, ends: 62 } },
   shape: { summary: 'A triangle', value: { what: 'shape', shape: 'triangle', baseMm: 150, heightMm: 100, spacingMm: 5, pickSpacingMm: 1.45, ends: 62, symmetric: true } },
+  dyeing: { summary: 'Wool dyed with weld', value: { what: 'piece', piece: { craft: 'dyeing', fibre: { kind: 'wool', massG: 250 }, mordant: { agent: 'alum' }, tartar: {}, dye: { percent: 100 } } } },
   lengthText: { summary: 'For a rule with sixteenths', value: { what: 'length-text', mm: 138.1125, system: 'imperial', round: 'nearest' } },
 };
 
@@ -64,10 +64,7 @@ const RECKON: Schema = {
     required: true,
     content: {
       'application/json': {
-        schema: {
-          oneOf: Object.values(SCHEMAS_OF).map(({ question }) => ref(question)),
-          discriminator: { propertyName: 'what', mapping: Object.fromEntries(Object.entries(SCHEMAS_OF).map(([what, { question }]) => [what, `#/components/schemas/${question}`])) },
-        },
+        schema: toldBy('what', Object.fromEntries(Object.entries(SCHEMAS_OF).map(([what, { question }]) => [what, question]))),
         examples: EXAMPLES,
       },
     },
@@ -87,10 +84,10 @@ export const RECKON_DOCUMENT: Schema = {
   info: {
     title: 'Fellmark reckoner',
     version: '1.0.0',
-    summary: 'The arithmetic of weaving on a frame loom.',
+    summary: 'The arithmetic of weaving, knotting and dyeing.',
     description: 'The same reckoning as the page at /reckoner and as every plan. No account is needed. What it gives is reckoned from what it is told: a swatch of one’s own beats it.',
   },
   servers: [{ url: '/' }],
   paths: { '/api/reckon': { post: RECKON } },
-  components: { schemas: { ...YARN_SCHEMAS, ...QUESTION_SCHEMAS, ...PIECE_SCHEMAS, ...PLAN_SCHEMAS, ...PROBLEM_SCHEMAS } },
+  components: { schemas: { ...YARN_SCHEMAS, ...QUESTION_SCHEMAS, ...CRAFT_SCHEMAS, ...PROBLEM_SCHEMAS } },
 };

@@ -1,6 +1,6 @@
 /** The short questions and their answers. */
-import { lengthMm, MEASURES, measuresOfShape, MEASURE_KEYS } from '#contracts/reckon-api/piece-schemas.ts';
-import { choice, closed, flag, list, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
+import { MEASURES, measuresOfShape, MEASURE_KEYS } from '#contracts/reckon-api/frame-loom-piece-schemas.ts';
+import { choice, closed, flag, lengthMm, list, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
 
 const ends = whole('Working ends, doubled ones counted once.', { min: 2, max: 2000 });
 const spacingMm = lengthMm('From end to end.');

@@ -38,5 +38,27 @@ export function closed(description: string, properties: Readonly<Record<string, 
   };
 }
 
+export const LONGEST_MM = 20_000;
+/** A length somebody gives. */
+export const lengthMm = (description: string, max = LONGEST_MM): Schema => number(description, { above: 0, max });
+/** A length that is answered. */
+export const mm = (description: string): Schema => number(description, { min: 0 });
+/** A number of things that is answered. */
+export const count = (description: string): Schema => whole(description, { min: 0 });
+export const role = (description: string): Schema => text(description, { minLength: 1, maxLength: 40 });
+/** How lessons call a part of the piece. */
+export const partName = (description: string): Schema => text(description, { pattern: '^[a-z0-9-]{1,40}$' });
+
+/** Yarns or cords by their role. */
+export const byRole = (value: Schema, more: Schema = {}): Schema => ({
+  type: 'object', description: 'By role.', propertyNames: { pattern: '^[A-Za-z][A-Za-z0-9-]{0,39}$' }, additionalProperties: value, ...more,
+});
+
+/** One of several schemas, told apart by what stands under `key`. */
+export const toldBy = (key: string, names: Readonly<Record<string, string>>): Schema => ({
+  oneOf: Object.values(names).map(ref),
+  discriminator: { propertyName: key, mapping: Object.fromEntries(Object.entries(names).map(([value, name]) => [value, `#/components/schemas/${name}`])) },
+});
+
 /** Exactly one of these groups of keys is there. */
 export const exactlyOne = (...groups: readonly (readonly string[])[]): Schema => ({ oneOf: groups.map((required) => ({ required })) });

@@ -2,7 +2,18 @@
 import { choice, closed, exactlyOne, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
 
 const WAYS = ['tex', 'metresPer100g', 'count', 'class'] as const;
-const TRAITS = ['label', 'colour', 'strands', 'ashenhurstK', 'wrapsPerInch', 'freeDiameterMm', 'ball', 'fibre'] as const;
+
+/** What else a label tells. */
+export const YARN_TRAITS = {
+  label: text('What it is called.', { minLength: 1, maxLength: 120 }),
+  colour: text('For the drawing.', { pattern: '^#[0-9a-fA-F]{6}$' }),
+  strands: whole('Strands taken together as one thread; 1 when missing. All else is told of one strand.', { min: 1, max: 100 }),
+  ashenhurstK: number('K of Ashenhurst’s rule; 0.84 for weft, 0.90 for warp and for a yarn by itself when missing.', { min: 0.75, max: 1 }),
+  wrapsPerInch: number('Snug wraps in an inch, measured over 5 cm or more.', { min: 1, max: 60 }),
+  freeDiameterMm: number('Thickness of a strand lying free, measured; instead of wraps, for what cannot be wrapped.', { above: 0, max: 200 }),
+  ball: closed('A ball as it is sold.', { metres: number('Metres.', { above: 0, max: 1_000_000 }), grams: number('Grams.', { above: 0, max: 1_000_000 }) }),
+  fibre: text('Such as wool. Silk counted as cotton is read by a rule of its own.', { minLength: 1, maxLength: 60 }),
+} as const;
 
 export const YARN_SCHEMAS: Readonly<Record<string, Schema>> = {
   Yarn: closed(
@@ -15,16 +26,9 @@ export const YARN_SCHEMAS: Readonly<Record<string, Schema>> = {
         system: choice('The system it is counted in.', 'ne-cotton', 'spun-silk', 'ne-worsted', 'nm', 'lea', 'run', 'denier', 'dtex', 'jute', 'yorkshire', 'grain'),
       }),
       class: whole('Shops’ class from 0, lace, to 7, jumbo: a rough guess, for a yarn of which nothing else is known.', { min: 0, max: 7 }),
-      label: text('What it is called.', { minLength: 1, maxLength: 120 }),
-      colour: text('For the drawing.', { pattern: '^#[0-9a-fA-F]{6}$' }),
-      strands: whole('Strands taken together as one thread; 1 when missing. All else is told of one strand.', { min: 1, max: 100 }),
-      ashenhurstK: number('K of Ashenhurst’s rule; 0.84 for weft, 0.90 for warp and for a yarn by itself when missing.', { min: 0.75, max: 1 }),
-      wrapsPerInch: number('Snug wraps in an inch, measured over 5 cm or more.', { min: 1, max: 60 }),
-      freeDiameterMm: number('Thickness of a strand lying free, measured; instead of wraps, for what cannot be wrapped.', { above: 0, max: 200 }),
-      ball: closed('A ball as it is sold.', { metres: number('Metres.', { above: 0, max: 1_000_000 }), grams: number('Grams.', { above: 0, max: 1_000_000 }) }),
-      fibre: text('Such as wool. Silk counted as cotton is read by a rule of its own.', { minLength: 1, maxLength: 60 }),
+      ...YARN_TRAITS,
     },
-    [...WAYS, ...TRAITS],
+    [...WAYS, ...Object.keys(YARN_TRAITS)],
     { ...exactlyOne(...WAYS.map((way) => [way])), not: { required: ['wrapsPerInch', 'freeDiameterMm'] } },
   ),
   YarnQuestion: closed('One yarn in every count.', { what: { const: 'yarn' }, yarn: ref('Yarn') }),

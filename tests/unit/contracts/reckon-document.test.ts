@@ -8,6 +8,7 @@ import { Ajv2020, type ValidateFunction } from 'ajv/dist/2020.js';
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { RECKON_DOCUMENT, SCHEMAS_OF } from '#contracts/reckon-api/document.ts';
+import { CRAFT_NAMES, type CraftName } from '#core/craft/crafts.ts';
 import { reckon, type Question } from '#core/craft/reckon.ts';
 import { answerQuestion } from '#server/web/answer-question.ts';
 import { faultsOf, WIRE_ROWS } from '../../reference/wire-rows.ts';
@@ -96,11 +97,50 @@ describe('reader and schemas', () => {
       ],
     },
   };
+  const BALL = { metres: 180, grams: 100 };
+  const FULL_MACRAME = {
+    what: 'piece',
+    piece: {
+      craft: 'macrame', rod: { kind: 'rod', diameterMm: 20, lengthMm: 400 }, seed: 7,
+      yarns: { main: { diameterMm: 4, tex: 9000, label: 'Cord', colour: '#ddd3bb', ball: BALL, fibre: 'cotton' }, wrap: { tex: 2000, strands: 1 } },
+      columns: [
+        { name: 'net', yarn: 'main', cords: 4, sections: [
+          { technique: 'half-hitches', name: 'head', rows: 1, slant: 'left' },
+          { technique: 'alternating', rows: 3, gapMm: 10 },
+          { technique: 'square-knots', knots: 4, gapMm: 5, spiral: true },
+          { technique: 'plain', heightMm: 40 }] },
+        { yarn: 'main', cords: 2, sections: [{ technique: 'square-knots', heightMm: 100 }, { technique: 'gathering', name: 'neck', wraps: 5, yarn: 'wrap' }] },
+      ],
+      foot: [{ technique: 'plain', heightMm: 20 }, { technique: 'gathering', wraps: 6 }, { technique: 'fringe', heightMm: 100 }],
+      takes: { squareKnot: 15, squareRise: 3, doubleHalfHitch: 14 }, allowances: { margin: 0.1, tailMm: 60 },
+    },
+  };
+  const RING = { what: 'piece', piece: { ...FULL_MACRAME.piece, rod: { kind: 'ring', diameterMm: 120, thickMm: 8 } } };
+  const FULL_DYEING = {
+    what: 'piece',
+    piece: { craft: 'dyeing', fibre: { kind: 'wool', massG: 250, label: 'Skeins', colour: '#eeeeee' }, mordant: { agent: 'alum', percent: 15 }, tartar: { percent: 6 }, tannin: { percent: 8 }, dye: { percent: 100, label: 'Weld', colour: '#c9a83a' }, iron: { percent: 2 }, liquorRatio: 30 },
+  };
+  const FULL_HEDDLE = {
+    what: 'piece',
+    piece: {
+      craft: 'rigid-heddle', size: { widthMm: 200, lengthMm: 1500 }, heddle: { spacingMm: 2.54, widthMm: 500 }, picksPerCm: 4, pieces: 2,
+      yarns: { warp: { tex: 250, ball: BALL }, weft: { metresPer100g: 400, label: 'Wool' } },
+      allowances: { drawIn: 0.08, widthShrinkage: 0.05, lengthShrinkage: 0.05, takeUp: 0.1, fringeMm: 200, gapMm: 50, wasteMm: 610, margin: 0.1 },
+    },
+  };
+  const FULL: readonly (readonly [CraftName, Json])[] = [['frame-loom', FULL_PIECE], ['macrame', FULL_MACRAME], ['macrame', RING], ['dyeing', FULL_DYEING], ['rigid-heddle', FULL_HEDDLE]];
   const POINTS = { what: 'shape', shape: 'points', points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 0 }, { xMm: 20, yMm: 30 }], spacingMm: 5, pickSpacingMm: 2, ends: 62, symmetric: false };
-  const SOUND = [FULL_PIECE, POINTS, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
+  const SOUND = [...FULL.map(([, question]) => question), POINTS, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
 
-  test('the fullest piece is answered', () => {
-    expect(reckon(FULL_PIECE)).toMatchObject({ ok: true });
+  test('there is a full piece of every craft', () => {
+    expect([...new Set(FULL.map(([craft]) => craft))].sort()).toEqual([...CRAFT_NAMES].sort());
+  });
+
+  test.each(FULL)('the fullest piece of %s is answered, and its plan fits its schema', (_, question) => {
+    const answer = reckon(question);
+    expect(answer).toMatchObject({ ok: true });
+    expect(fits('PieceQuestion', question)).toEqual([]);
+    expect(answer.ok ? fits('Plan', answer.value) : []).toEqual([]);
   });
 
   /** Places of a question, as lists of keys. */
@@ -137,15 +177,15 @@ describe('reader and schemas', () => {
     if (readerRefuses) expect(schemaRefuses, `the schema takes what is refused: ${JSON.stringify(answer.problems)}`).toBe(true);
   };
 
-  test('refuse the same missing values, kinds and limits, at every place of a piece', () => {
-    for (const place of placesOf(FULL_PIECE).filter((path) => path.length > 0 && path.join() !== 'what')) {
-      for (const value of othersFor(atPlace(FULL_PIECE, place))) agree(changed(FULL_PIECE, place, value));
+  test.each(FULL)('refuse the same missing values, kinds and limits, at every place of a piece of %s', (_, question) => {
+    for (const place of placesOf(question).filter((path) => path.length > 0 && path.join() !== 'what')) {
+      for (const value of othersFor(atPlace(question, place))) agree(changed(question, place, value));
     }
   });
 
   test('refuse the same in the short questions', () => {
     fc.assert(
-      fc.property(fc.constantFrom(...SOUND.slice(1)), fc.nat(), fc.constantFrom(...OTHER_KINDS, ...BESIDE_LIMITS), (question, pick, value) => {
+      fc.property(fc.constantFrom(...SOUND.slice(FULL.length)), fc.nat(), fc.constantFrom(...OTHER_KINDS, ...BESIDE_LIMITS), (question, pick, value) => {
         const places = placesOf(question).filter((path) => path.length > 0 && path.join() !== 'what');
         agree(changed(question, places[pick % places.length] ?? ['what'], value));
       }),

@@ -1,16 +1,13 @@
-/** A piece as it is asked about: loom, warp, beat, yarns by role, and the bands in the order they are woven. */
-import { choice, closed, exactlyOne, flag, list, number, ref, text, whole, type Schema } from '#contracts/reckon-api/schema.ts';
+/** A piece woven on a frame as it is asked about: loom, warp, beat, yarns by role, and the bands in the order they are woven. */
+import { byRole, choice, closed, exactlyOne, flag, lengthMm, list, LONGEST_MM, number, partName, ref, role, toldBy, whole, type Schema } from '#contracts/reckon-api/schema.ts';
 
-const LONGEST_MM = 20_000;
-export const lengthMm = (description: string, max = LONGEST_MM): Schema => number(description, { above: 0, max });
 const allowanceMm = (description: string): Schema => number(description, { min: 0, max: LONGEST_MM });
-const role = (description: string): Schema => text(description, { minLength: 1, maxLength: 40 });
 const rows = whole('Rows.', { min: 1, max: 10_000 });
 const bandHeight = lengthMm('Height of the band in the finished piece, mm.');
 
 /** A band of one technique; every band may have a name. */
 function band(description: string, technique: string, properties: Readonly<Record<string, Schema>>, optional: readonly string[] = [], more: Schema = {}): Schema {
-  const named = { technique: { const: technique }, name: text('How lessons call the band; once in a piece.', { pattern: '^[a-z0-9-]{1,40}$' }), yarn: role('Yarn role.') };
+  const named = { technique: { const: technique }, name: partName('How lessons call the band; once in a piece.'), yarn: role('Yarn role.') };
   return closed(description, { ...named, ...properties }, ['name', ...optional], more);
 }
 
@@ -179,19 +176,16 @@ const ALLOWANCES: Readonly<Record<string, Schema>> = {
   marginWarp: number('Share bought on top; 0.1.', { min: 0, max: 1 }),
 };
 
-export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
+export const FRAME_LOOM_PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
   ...BANDS,
-  Band: {
-    oneOf: Object.values(BAND_OF).map(ref),
-    discriminator: { propertyName: 'technique', mapping: Object.fromEntries(Object.entries(BAND_OF).map(([technique, name]) => [technique, `#/components/schemas/${name}`])) },
-  },
+  Band: toldBy('technique', BAND_OF),
   Shape,
   ShapePoint,
   Loom,
   Finish,
   Warp,
-  Piece: closed(
-    'A piece, in millimetres. Shares are fractions: 0.02 is two per cent.',
+  FrameLoomPiece: closed(
+    'A piece woven on a frame, in millimetres. Shares are fractions: 0.02 is two per cent.',
     {
       craft: { const: 'frame-loom' },
       size: closed('Finished size of the woven cloth, without fringe.', { widthMm: lengthMm('Width.'), heightMm: lengthMm('Height.') }),
@@ -209,16 +203,9 @@ export const PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
       finish: ref('Finish'),
       hangs: choice('`turned` hangs with the end that was woven first at the top.', 'as-woven', 'turned'),
       seed: whole('Of the drawing’s chance.', { min: 0, max: Number.MAX_SAFE_INTEGER }),
-      yarns: {
-        type: 'object',
-        description: 'By yarn role.',
-        propertyNames: { pattern: '^[A-Za-z][A-Za-z0-9-]{0,39}$' },
-        additionalProperties: ref('Yarn'),
-        maxProperties: 60,
-      },
+      yarns: byRole(ref('Yarn'), { maxProperties: 60 }),
       bands: list('In the order they are woven.', ref('Band'), { minItems: 1, maxItems: 200 }),
     },
     ['mode', 'allowances', 'dowel', 'finish', 'hangs', 'seed'],
   ),
-  PieceQuestion: closed('A whole plan.', { what: { const: 'piece' }, piece: ref('Piece') }),
 };

@@ -1,18 +1,8 @@
-/** A plan as it is answered. Lengths are millimetres, masses grams, time hours; nothing is rounded but counts. */
-import { choice, closed, list, number, ref, whole, type Schema } from '#contracts/reckon-api/schema.ts';
+/** The plan of a piece woven on a frame as it is answered. Lengths are millimetres, masses grams, time hours; nothing is rounded but counts. */
+import { choice, closed, count, list, mm, number, ref, type Schema } from '#contracts/reckon-api/schema.ts';
+import { BOUGHT, EVERY_PLAN } from '#contracts/reckon-api/shared-schemas.ts';
 
-const mm = (description: string): Schema => number(description, { min: 0 });
-const count = (description: string): Schema => whole(description, { min: 0 });
-
-const BOUGHT = {
-  netMm: mm('What the work takes.'),
-  withMarginMm: mm('What to have in hand.'),
-  massG: number('Of the net length.', { min: 0 }),
-  balls: count('Whole balls; only where a ball was told.'),
-} as const;
-
-export const PLAN_SCHEMAS: Readonly<Record<string, Schema>> = {
-  WarpPlan: closed('Warp yarn.', BOUGHT, ['balls']),
+export const FRAME_LOOM_PLAN_SCHEMAS: Readonly<Record<string, Schema>> = {
   YarnPlan: closed('Weft yarn of one role.', { ...BOUGHT, loads: count('Shuttles or butterflies to fill.'), rowsPerLoad: count('Rows one of them weaves.') }, ['balls']),
   BandPlan: closed(
     'One band.',
@@ -29,7 +19,7 @@ export const PLAN_SCHEMAS: Readonly<Record<string, Schema>> = {
     },
     ['picks', 'stitches', 'knots', 'strands', 'cutMm'],
   ),
-  Plan: closed('Everything the piece takes.', {
+  FrameLoomPlan: closed('Everything a piece woven on a frame takes.', {
     ends: closed('Warp ends and nails.', {
       count: count('Ends on the loom.'),
       working: count('What the weft takes as one.'),
@@ -73,8 +63,6 @@ export const PLAN_SCHEMAS: Readonly<Record<string, Schema>> = {
       },
       ['dowel', 'cordMm', 'lashingMm'],
     ),
-    massG: mm('Of the finished piece.'),
-    hours: closed('At the loom, as hands differ.', { likely: mm('Likely.'), low: mm('Quick hands.'), high: mm('Slow hands.') }),
-    warnings: ref('Warnings'),
+    ...EVERY_PLAN,
   }),
 };
