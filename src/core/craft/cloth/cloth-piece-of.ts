@@ -1,10 +1,11 @@
 /** From a described piece and its plan to what the drawing needs. */
 import type { ClothBand, EndSpan, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { NEUTRAL, mix, shade, yarnColour } from '#core/craft/cloth/colour.ts';
-import { ASHENHURST_K } from '#core/craft/defaults.ts';
-import type { Band, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
+import { ASHENHURST_K, FRINGE_BUNDLE_ENDS } from '#core/craft/defaults.ts';
+import type { Band, Finish, FrameLoomPiece, Shape, Yarn } from '#core/craft/piece.ts';
 import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { strandsInRow } from '#core/craft/techniques/tabby.ts';
+import { present } from '#core/craft/reading/present.ts';
 import { placeShape, type BandGrid } from '#core/craft/techniques/colour-rows.ts';
 import { threadOf, withStrands } from '#core/craft/yarn/thread.ts';
 
@@ -34,8 +35,13 @@ export function clothPieceOf(piece: FrameLoomPiece, plan: FrameLoomPlan, title: 
       insideHeightMm: piece.loom.insideHeightMm,
       bottomMm: plan.loom.bottomMm,
     },
+    ...present({ finish: finishOf(piece.finish), fixing: piece.dowel?.fixing }),
     bands,
   };
+}
+
+function finishOf(finish: Finish | undefined): Required<Finish> | undefined {
+  return finish && { bottom: finish.bottom, fringeMm: finish.fringeMm ?? 0, bundleEnds: finish.bundleEnds ?? FRINGE_BUNDLE_ENDS };
 }
 
 interface NamedColour {
@@ -60,7 +66,7 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: FrameLoomPi
       const strands = strandsInRow(band) ?? own?.strands;
       const together = band.basket === true ? 2 : 1;
       const grid = { spacingMm: plan.ends.spacingMm * together, pickSpacingMm, ends: Math.floor(plan.ends.working / together), rows: picks, widthMm: piece.size.widthMm };
-      const shapes = (band.shapes ?? []).map((shape) => ({ ...roleOf(shape.yarn, piece), spans: spansOf(shape, grid) }));
+      const shapes = (band.shapes ?? []).map((shape) => ({ ...roleOf(shape.yarn, piece), ...present({ join: shape.join }), spans: spansOf(shape, grid) }));
       return { ...base, technique: 'tabby', picks, cover: coverOf(own, strands, pickSpacingMm), shapes, ...(together === 2 && { together }), ...(strands !== undefined && { strands }) };
     }
     case 'soumak':
@@ -75,7 +81,7 @@ function bandOf(band: Band, planned: BandPlan, index: number, piece: FrameLoomPi
         soumakShare: soumakShare(band.rows, band.tabbyBetween, planned.heightMm, plan.weft.pickSpacingMm),
       };
     case 'rya':
-      return { ...base, technique: 'rya', rows: band.rows, knotEnds: 2 * band.legEnds, strands: band.strands, pileMm: band.pileMm, groundColour: groundOf(index, piece) };
+      return { ...base, technique: 'rya', rows: band.rows, knotEnds: 2 * band.legEnds, ...present({ edgeEnds: band.edgeEnds }), strands: band.strands, pileMm: band.pileMm, groundColour: groundOf(index, piece) };
     case 'roving':
       return { ...base, technique: 'roving', over: band.over, passes: band.passes ?? 1 };
     case 'loop-pile':

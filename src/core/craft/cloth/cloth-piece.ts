@@ -4,6 +4,8 @@
  * Bands come in the order they are woven. All counts are the real ones; how many threads a picture can show is the
  * drawing's own affair.
  */
+import type { Meeting } from '#core/craft/interlacement/lay.ts';
+import type { Finish, Fixing } from '#core/craft/piece.ts';
 import type { Units } from '#core/units/units.ts';
 
 export interface WovenPiece {
@@ -21,6 +23,10 @@ export interface WovenPiece {
   /** Woven head down, so it is turned through half a circle to hang. */
   readonly turned: boolean;
   readonly loom: LoomOutline | undefined;
+  /** What became of the warp's ends below the cloth; where nobody has said it, they hang in knotted fours. */
+  readonly finish?: Required<Finish>;
+  /** How it is held to its dowel; `slipped` when missing. */
+  readonly fixing?: Fixing;
   readonly bands: readonly ClothBand[];
 }
 
@@ -89,6 +95,8 @@ export interface ClothShape {
   readonly colour: string;
   readonly yarn: string;
   readonly spans: readonly EndSpan[];
+  /** How its colour meets those beside it; `slit` when missing. */
+  readonly join?: Meeting;
 }
 
 /** Ends `from` up to (not including) `to` in pick `row` (0 = the band's first). A row may have several. */
@@ -114,6 +122,8 @@ export interface RyaBand extends BandBase {
   readonly rows: number;
   /** Working ends under one knot. */
   readonly knotEnds: number;
+  /** Plain ends at each selvedge; 0 when missing. */
+  readonly edgeEnds?: number;
   readonly strands: number;
   readonly pileMm: number;
   readonly groundColour: string;

@@ -14,7 +14,27 @@ export function describeCloth(piece: ClothPiece, view: Pick<ClothView, 'woven' |
   if (piece.kind === 'hung') return `${piece.title}, ${piece.thing}, ${piece.words[units]}`;
   const bands = piece.bands.filter((band) => band.technique !== 'heading').map((band) => bandWords(band, units));
   const order = bands.length === 0 ? '' : ` In the order it is woven: ${bands.join(', ')}.`;
-  return `${piece.title}, ${piece.thing}, ${length(piece.widthMm, units)} wide.${order}${progressWords(piece, view.woven ?? 1, units)}`;
+  return `${piece.title}, ${piece.thing}, ${length(piece.widthMm, units)} wide.${order}${finishWords(piece, units)}${progressWords(piece, view.woven ?? 1, units)}`;
+}
+
+/** " Its warp ends are knotted in bundles of 6 and hang 7 cm. It is lashed to its dowel." Nothing of what nobody has said. */
+function finishWords({ finish, fixing = 'slipped' }: WovenPiece, units: Units): string {
+  const held = fixing === 'slipped' ? '' : ` It is ${fixing} to its dowel.`;
+  return finish === undefined ? held : ` Its warp ends are ${endsWords(finish, units)}.${held}`;
+}
+
+function endsWords({ bottom, fringeMm, bundleEnds }: NonNullable<WovenPiece['finish']>, units: Units): string {
+  const hang = length(fringeMm, units);
+  switch (bottom) {
+    case 'knotted':
+      return `knotted in bundles of ${bundleEnds}${fringeMm > 0 ? ` and hang ${hang}` : ''}`;
+    case 'twisted':
+      return fringeMm > 0 ? `twisted into cords of ${bundleEnds}, ${hang} long` : `twisted into cords of ${bundleEnds}`;
+    case 'tucked':
+      return 'tucked back into the cloth';
+    case 'plain':
+      return fringeMm > 0 ? `left loose, ${hang} long` : 'cut at the edge of the cloth';
+  }
 }
 
 function bandWords(band: ClothBand, units: Units): string {

@@ -13,7 +13,7 @@ import { checkView, detailOf, type ClothView } from '#core/craft/cloth/cloth-vie
 import { describeCloth } from '#core/craft/cloth/describe-cloth.ts';
 import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { drawFellLine } from '#core/craft/cloth/fell-line.ts';
-import { drawCastShadow, drawDowel } from '#core/craft/cloth/hanging.ts';
+import { drawCastShadow, drawDowel, drawFixing } from '#core/craft/cloth/hanging.ts';
 import { drawHung } from '#core/craft/cloth/hung.ts';
 import { layBands, type DrawnBands } from '#core/craft/cloth/lay-bands.ts';
 import { layOnLoom } from '#core/craft/cloth/lay-on-loom.ts';
@@ -53,6 +53,8 @@ function pileRoom(view: ClothView): (bandHeight: number) => number {
 const MOST_ROWS = 250;
 /** Views whose rows have at least this many pixels show the plies of their yarn. */
 const PLIED_FROM = 9;
+/** Pieces at least so many pixels wide show how their colours meet. */
+const JOINED_FROM = 180;
 
 function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
   const { minEnd, minPick } = detailOf(view);
@@ -75,6 +77,7 @@ function weaveOf(piece: WovenPiece, view: ClothView, width: number): Weave {
     firstRow: 0,
     endsTogether: piece.endsTogether,
     plied: minPick >= PLIED_FROM,
+    joined: minPick >= PLIED_FROM || (width >= JOINED_FROM && (view.as === 'hanging' || view.as === 'loom')),
     warpColour: piece.warpColour,
     warpWidth: Math.min(end * 0.4, 9),
     paths: new PathStore(view.id),
@@ -102,13 +105,13 @@ function hang(piece: WovenPiece, view: ClothView): Picture {
   const { left: inset, top: at, dowelTop: top } = hangingBox(piece, view.width);
   const weave = weaveOf(piece, view, view.width - 2 * inset);
   const bands = layBands(piece, weave.pxPerMm, wovenShare(view), weave);
-  const bare = wovenShare(view) >= 1 && !endsInPile(piece, weave);
-  const below = bare ? warpFringeHeight(weave) : pileBelow(piece, bands, weave);
-  const fringe = bare ? `<g transform="translate(${num(inset)} ${num(at + bands.height)})">${drawWarpFringe(weave)}</g>` : '';
+  const bare = wovenShare(view) >= 1 && (piece.finish !== undefined || !endsInPile(piece, weave));
+  const below = Math.max(bare ? warpFringeHeight(piece, weave) : 0, pileBelow(piece, bands, weave));
+  const fringe = bare ? `<g transform="translate(${num(inset)} ${num(at + bands.height)})">${drawWarpFringe(piece, weave)}</g>` : '';
   const body =
     drawCastShadow(inset, top, weave.width, bands.height) +
     drawDowel(view.width, inset * 0.1, top) +
-    `<g transform="translate(${num(inset)} 0)">${drawEnds(top * 0.8, top + 4, weave)}</g>` +
+    `<g transform="translate(${num(inset)} 0)">${drawEnds(top * 0.8, top + 4, weave)}${drawFixing(piece, view.width, top, weave)}</g>` +
     fringe +
     `<g transform="translate(${num(inset)} ${num(at)})">${bands.markup}</g>`;
   return { width: view.width, height: at + bands.height + below + 6, body, defs: defsOf(piece, weave, bands.clip) };

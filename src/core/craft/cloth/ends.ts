@@ -20,7 +20,7 @@ export function drawEverySecondEnd(top: number, bottom: number, first: 0 | 1, we
   return endsAt(d, height, weave, (width, off) => dashes(width, 2 * weave.end - width, (first + 0.5) * weave.end - width / 2 + off));
 }
 
-/** The ends under lying lines of a given thickness. Every line begins at a multiple of two ends. */
+/** The ends under lying lines of a given thickness. Every line begins at a multiple of one end. */
 export function strokeEnds(d: string, height: number, weave: Weave): string {
   return endsAt(d, height, weave, (width, off) => eachEnd(weave, width, off));
 }

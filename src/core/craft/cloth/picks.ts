@@ -8,7 +8,7 @@ import { light, shade } from '#core/craft/cloth/colour.ts';
 import { ROUND, dashes, moved, num } from '#core/craft/cloth/markup.ts';
 import { firstOver, rowOnScreen, type Weave } from '#core/craft/cloth/weave.ts';
 
-/** One pick on the screen. `x0` is a multiple of two ends, so that dashes keep step with the warp. */
+/** One pick on the screen. `x0` and `x1` are multiples of one end. */
 export interface PickRow {
   readonly y: number;
   /** Counted from the first one woven. */
@@ -25,7 +25,7 @@ export interface Picks {
 }
 
 /** Rows finer than this show no light and shadow, and are too fine to bow. */
-const LIT_FROM = 3.4;
+export const LIT_FROM = 3.4;
 const BOWED_FROM = 5;
 /** Where so many rows lie together, nobody sees that they bow. */
 const BOWED_ROWS = 100;
@@ -75,7 +75,8 @@ function sortRows(rows: readonly PickRow[], pitch: number, weave: Weave): { whol
     const bow = bowed ? (weave.chance() - 0.5) * Math.min(pitch * 0.5, width * 0.02) : 0;
     const d = `M${num(row.x0)} ${num(row.y)}` + (bow === 0 ? `h${num(width)}` : `q${num(width / 2)} ${num(bow)} ${num(width)} 0`);
     whole += d;
-    const lot = firstOver(row.row, weave) + 2 * Math.floor(weave.chance() * 3);
+    /* A row that begins at an odd end begins with what its neighbours do there. */
+    const lot = (firstOver(row.row, weave) + Math.round(row.x0 / weave.end)) % 2 + 2 * Math.floor(weave.chance() * 3);
     found[lot] = (found[lot] ?? '') + d;
   }
   const lots = found.map((d, lot) => ({ d, over: lot % 2 === 1 ? (1 as const) : (0 as const), tone: lot >> 1 })).filter((lot) => lot.d !== '');

@@ -39,7 +39,7 @@ function patch(band: ClothBand, piece: WovenPiece, index: number): ClothBand[] {
     case 'soumak':
       return [{ ...band, heightMm, rows: 6 }];
     case 'rya':
-      return [{ ...band, heightMm, rows: 3, pileMm: 34 }];
+      return [{ ...band, heightMm, rows: 3, pileMm: 34, edgeEnds: 0 }];
     case 'loop-pile':
       return [{ ...band, heightMm, rows: 5, loopMm: 12 }];
     case 'twining':
@@ -47,7 +47,7 @@ function patch(band: ClothBand, piece: WovenPiece, index: number): ClothBand[] {
     case 'roving':
       return [{ ...band, heightMm, over: 2, passes: 2 }];
     case 'hem-stitch':
-      return [{ ...band, reachMm: 14 }, plain(neighbourColour(piece, index, band.colour), '', heightMm)];
+      return [{ ...band, bundleEnds: Math.min(band.bundleEnds, 5), reachMm: 14 }, plain(neighbourColour(piece, index, band.colour), '', heightMm)];
     case 'heading':
       return [{ ...band, heightMm }];
   }

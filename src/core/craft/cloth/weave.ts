@@ -1,6 +1,6 @@
 /** What every band needs to know of the drawing it stands in. */
 import type { PathStore } from '#core/craft/cloth/markup.ts';
-import { tabbyFace, wayOfRow } from '#core/craft/interlacement/lay.ts';
+import { tabbyFace, wayOfRow, type Ends } from '#core/craft/interlacement/lay.ts';
 
 export interface Weave {
   readonly id: string;
@@ -20,12 +20,37 @@ export interface Weave {
   readonly endsTogether: 1 | 2;
   /** Whether yarns show their plies: only near, where `defs` holds the paints for it. */
   readonly plied: boolean;
+  /** Whether it is seen how colours meet: not in what is as small as a swatch or a strip. */
+  readonly joined: boolean;
   readonly warpColour: string;
   readonly warpWidth: number;
   readonly paths: PathStore;
   readonly chance: () => number;
   /** Longest pile that may hang below its band, in pixels; strips keep it inside. */
   readonly longestPile: (bandHeight: number) => number;
+}
+
+/** Real working ends in the picture. */
+export const realEnds = ({ ends, grouped }: Pick<Weave, 'ends' | 'grouped'>): number => Math.round(ends * grouped);
+
+/** Where real ends lie on the screen, in pixels from the left. */
+export function stretchOf({ first, last }: Ends, weave: Pick<Weave, 'width' | 'ends' | 'grouped' | 'begin'>): { readonly x0: number; readonly x1: number } {
+  const step = weave.width / realEnds(weave);
+  const [from, to] = [first * step, (last + 1) * step];
+  return weave.begin === 'head' ? { x0: weave.width - to, x1: weave.width - from } : { x0: from, x1: to };
+}
+
+/** Groups of ends as a picture can show them: where two drawn ends have no room in one, so many neighbours together as make it. */
+export function groupsShown(groups: readonly Ends[], { end, width, ends, grouped }: Pick<Weave, 'end' | 'width' | 'ends' | 'grouped'>): readonly Ends[] {
+  const [widest = 1] = groups.map(({ first, last }) => last - first + 1);
+  const together = Math.ceil((2 * end) / (widest * (width / realEnds({ ends, grouped }))) - 0.01);
+  if (together <= 1) return groups;
+  const shown: Ends[] = [];
+  for (let at = 0; at < groups.length; at += together) {
+    const [first, last] = [groups[at], groups[Math.min(at + together, groups.length) - 1]];
+    if (first !== undefined && last !== undefined) shown.push({ first: Math.min(first.first, last.first), last: Math.max(first.last, last.last) });
+  }
+  return shown;
 }
 
 /** Rows that can be shown in `height` pixels: all of them, or as many as have `min` pixels each; at least 2. */

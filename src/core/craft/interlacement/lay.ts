@@ -135,5 +135,15 @@ export function colourEnds(ends: Ends, at: number, meeting: Meeting): readonly [
   return [{ first: ends.first, last: shared }, { first: at, last: ends.last }];
 }
 
+/**
+ * The ends on which one row shows each of the two colours. An end that is shared shows one of them there and back, then the
+ * other: that is how the hand takes turns.
+ */
+export function endsShown(ends: Ends, at: number, meeting: Meeting, row: number): readonly [Ends, Ends] {
+  const [left, right] = colourEnds(ends, at, meeting);
+  if (left.last < right.first) return [left, right];
+  return (((row % 4) + 4) % 4) < 2 ? [left, { ...right, first: right.first + 1 }] : [{ ...left, last: left.last - 1 }, right];
+}
+
 /** Stretches of a lay on one face. */
 export const onFace = (lay: Lay, face: Face): Lay => lay.filter((pass) => pass.face === face);

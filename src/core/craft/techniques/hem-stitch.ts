@@ -1,4 +1,5 @@
 /** Hem-stitch: the edge is sewn round bundles of ends, so that no row can slip. */
+import type { Ends } from '#core/craft/interlacement/lay.ts';
 import type { HemStitchBand } from '#core/craft/piece.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { readName, readRole } from '#core/craft/techniques/read-rules.ts';
@@ -35,6 +36,14 @@ export interface Bundles {
 
 export function bundlesOf(ends: number, bundleEnds: number): Bundles {
   return { whole: Math.floor(ends / bundleEnds), lastEnds: ends % bundleEnds };
+}
+
+/** The ends of each bundle in the order they are sewn, from right to left. */
+export function bundleEndsFrom(ends: number, bundleEnds: number): readonly Ends[] {
+  const { whole, lastEnds } = bundlesOf(ends, bundleEnds);
+  const right = (bundle: number): number => ends - 1 - bundle * bundleEnds;
+  const bundles = Array.from({ length: whole }, (_, bundle): Ends => ({ first: right(bundle) - bundleEnds + 1, last: right(bundle) }));
+  return lastEnds === 0 ? bundles : [...bundles, { first: 0, last: lastEnds - 1 }];
 }
 
 const BUNDLE_ENDS: NumberRule = { name: 'Ends in a bundle', min: 1, max: 100, whole: true };

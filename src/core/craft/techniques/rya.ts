@@ -1,4 +1,5 @@
 /** Rya: cut strands knotted round two legs of ends, hanging as a fringe or pile. */
+import type { Ends } from '#core/craft/interlacement/lay.ts';
 import type { RyaBand } from '#core/craft/piece.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { present } from '#core/craft/reading/present.ts';
@@ -38,6 +39,14 @@ export function ryaCutLength(knot: RyaKnot): number {
 /** Knots in a row, with so many plain ends left at each selvedge. */
 export function ryaKnotsPerRow(ends: number, edgeEnds: number, legEnds: number): number {
   return Math.floor((ends - 2 * edgeEnds) / (2 * legEnds));
+}
+
+/** The ends of each knot in a row, from the left; what is left over stays plain at the right. */
+export function ryaKnotEnds(ends: number, edgeEnds: number, legEnds: number): readonly Ends[] {
+  return Array.from({ length: Math.max(0, ryaKnotsPerRow(ends, edgeEnds, legEnds)) }, (_, knot): Ends => {
+    const first = edgeEnds + knot * 2 * legEnds;
+    return { first, last: first + 2 * legEnds - 1 };
+  });
 }
 
 /** Strands come in multiples of 5 mm on a card; wider is safe, narrower is not. */

@@ -8,7 +8,8 @@ import { drawGround } from '#core/craft/cloth/bands/tabby.ts';
 import type { RyaBand } from '#core/craft/cloth/cloth-piece.ts';
 import { light, shade } from '#core/craft/cloth/colour.ts';
 import { ROUND, moved, num } from '#core/craft/cloth/markup.ts';
-import { drawnRows, type Weave } from '#core/craft/cloth/weave.ts';
+import { drawnRows, groupsShown, realEnds, stretchOf, type Weave } from '#core/craft/cloth/weave.ts';
+import { ryaKnotEnds } from '#core/craft/techniques/rya.ts';
 
 /** Tabby that shows between knots is packed this close. */
 const GROUND_COVER = 0.7;
@@ -31,21 +32,27 @@ export function drawRya(band: RyaBand, height: number, weave: Weave): string {
   const unit = height / rows;
   const fall = ryaFall(band, height / band.rows, weave);
   const groundRows = ryaGroundRows(height, weave);
-  const step = knotStep(band, weave);
-  const kinds = [pileRow(band, step, fall, weave), pileRow(band, step, fall, weave)];
+  const knots = knotsOf(band, weave);
+  const kinds = [pileRow(band, knots, fall, weave), pileRow(band, knots, fall, weave)];
   let drawn = drawGround(band.groundColour, groundRows, height, GROUND_COVER, weave);
   for (let row = rows - 1; row >= 0; row--) {
-    drawn += drawPile(kinds[row % 2] ?? [], (row + 0.4) * unit, strandWidth(step), band.colour, weave);
-    drawn += drawKnots(step, (row + 0.4) * unit, band.colour, weave);
+    drawn += drawPile(kinds[row % 2] ?? [], (row + 0.4) * unit, strandWidth(knots.step), band.colour, weave);
+    drawn += drawKnots(knots, (row + 0.4) * unit, band.colour, weave);
   }
   return drawn;
 }
 
-/** Pixels from knot to knot. */
-function knotStep(band: RyaBand, weave: Weave): number {
-  const real = (weave.end / weave.grouped) * band.knotEnds;
-  const knots = Math.max(1, Math.round(weave.width / Math.max(real, weave.end * 2)));
-  return weave.width / knots;
+/** The knots of a row, where the plan has them; ends at the edges that are left plain have none. */
+function knotsOf(band: RyaBand, weave: Weave): Knots {
+  const places = groupsShown(ryaKnotEnds(realEnds(weave), band.edgeEnds ?? 0, band.knotEnds / 2), weave).map((ends) => stretchOf(ends, weave));
+  return { middles: places.map(({ x0, x1 }) => (x0 + x1) / 2), step: Math.max(1, ...places.map(({ x0, x1 }) => x1 - x0)) };
+}
+
+interface Knots {
+  /** Pixels from the left. */
+  readonly middles: readonly number[];
+  /** From knot to knot. */
+  readonly step: number;
 }
 
 function strandWidth(step: number): number {
@@ -53,10 +60,10 @@ function strandWidth(step: number): number {
 }
 
 /** The strands of one row of knots, sorted by chance into three tones. */
-function pileRow(band: RyaBand, step: number, fall: number, weave: Weave): string[] {
+function pileRow(band: RyaBand, { middles, step }: Knots, fall: number, weave: Weave): string[] {
   const strands = drawnStrands(step, band.strands);
   const tones = ['', '', ''];
-  for (let x = step / 2; x < weave.width; x += step) {
+  for (const x of middles) {
     for (let strand = 0; strand < strands; strand++) {
       const end = Math.round(fall * (0.86 + weave.chance() * 0.18));
       const sway = (weave.chance() - 0.5) * step * 0.9;
@@ -79,11 +86,11 @@ function drawPile(tones: readonly string[], y: number, width: number, colour: st
   return drawn;
 }
 
-function drawKnots(step: number, y: number, colour: string, weave: Weave): string {
+function drawKnots({ middles, step }: Knots, y: number, colour: string, weave: Weave): string {
   const { paths } = weave;
   const width = strandWidth(step);
   let d = '';
-  for (let x = step / 2; x < weave.width; x += step) d += `M${num(x - step * 0.27)} 0h${num(step * 0.54)}`;
+  for (const x of middles) d += `M${num(x - step * 0.27)} 0h${num(step * 0.54)}`;
   const at = (off: number): string => ROUND + moved(0, y + off);
   let drawn = paths.stroke(d, shade(colour, 0.5), Math.max(2, width * 2), at(width * 0.3));
   drawn += paths.stroke(d, colour, Math.max(1.6, width * 1.6), at(0));

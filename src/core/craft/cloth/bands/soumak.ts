@@ -8,7 +8,7 @@ import { drawEnds } from '#core/craft/cloth/ends.ts';
 import { ROUND, box, moved, num } from '#core/craft/cloth/markup.ts';
 import { drawPicks, plyPaint, rowsOver } from '#core/craft/cloth/picks.ts';
 import { onFace, soumakRow } from '#core/craft/interlacement/lay.ts';
-import type { Weave } from '#core/craft/cloth/weave.ts';
+import { realEnds, type Weave } from '#core/craft/cloth/weave.ts';
 
 /** Rows thinner than this, in pixels, are gathered: there must be room for shadow, body and light. */
 const THINNEST_ROW = 4.4;
@@ -43,7 +43,7 @@ interface StitchRows {
 }
 
 function stitchRows(band: SoumakBand, thick: number, weave: Weave): StitchRows {
-  const row = soumakRow({ first: 0, last: Math.round(weave.ends * weave.grouped) - 1 }, band.over, band.back);
+  const row = soumakRow({ first: 0, last: realEnds(weave) - 1 }, band.over, band.back);
   const count = Math.max(1, Math.min(onFace(row, 'front').length, Math.round(weave.width / (thick * 0.6))));
   const step = weave.width / count;
   const rise = thick * 0.2;

@@ -1,4 +1,5 @@
 /** A band of tabby, and the shapes (wedges, slopes, circles) woven into it. */
+import { drawJoins, type ColourAt } from '#core/craft/cloth/bands/joins.ts';
 import type { ClothShape, TabbyBand } from '#core/craft/cloth/cloth-piece.ts';
 import { shade } from '#core/craft/cloth/colour.ts';
 import { drawEnds, strokeEnds } from '#core/craft/cloth/ends.ts';
@@ -7,6 +8,7 @@ import { spansByRow } from '#core/craft/cloth/spans.ts';
 import { drawPicks, rowsOver, sideBySide, type PickRow } from '#core/craft/cloth/picks.ts';
 import { drawSelvedge } from '#core/craft/cloth/selvedge.ts';
 import { drawnRows, rowOnScreen, type Weave } from '#core/craft/cloth/weave.ts';
+import { endsShown, type Ends, type Meeting } from '#core/craft/interlacement/lay.ts';
 
 export function drawTabby(band: TabbyBand, height: number, weave: Weave): string {
   const count = drawnRows(band.picks, height, weave.minPick);
@@ -14,12 +16,18 @@ export function drawTabby(band: TabbyBand, height: number, weave: Weave): string
   const met = metBy(band, weave);
   const threads = threadsDrawn(band, pitch, weave);
   const ground = drawGround(band.colour, count, height, band.cover, weave, { met, threads });
-  const shapes = band.shapes.map((shape) => {
-    const rows = sideBySide(shapeRows(shape, band, count, pitch, met), pitch, threads);
-    return drawShape(shape, rows, pitch / threads, band.cover, weave, met);
+  const areas = band.shapes.map((shape) => ({ shape, rows: shapeRows(shape, band, count, pitch, met) }));
+  const shapes = areas.map(({ shape, rows }, index) => {
+    const area = drawShape(shape, sideBySide(rows, pitch, threads), pitch / threads, band.cover, weave, met);
+    if (!weave.joined) return area;
+    const below = areas.slice(0, index);
+    const colourAt: ColourAt = (row, x) => below.findLast((area) => area.rows.some((each) => each.row === row.row && each.x0 < x && x < each.x1))?.shape.colour ?? band.colour;
+    return area + drawJoins(rows, joinOf(shape), pitch, shape.colour, colourAt, met);
   });
   return ground + shapes.join('');
 }
+
+const joinOf = ({ join = 'slit' }: ClothShape): Meeting => join;
 
 /** The warp as this band's weft meets it: in basket weave two ends are one. */
 function metBy(band: TabbyBand, weave: Weave): Weave {
@@ -62,17 +70,31 @@ function shapeRows(shape: ClothShape, band: TabbyBand, count: number, pitch: num
     for (const span of spans.get(Math.floor(((step + every / 2) / count) * band.picks)) ?? []) {
       const a = snap(span.from, weave);
       const b = snap(span.to, weave);
-      if (b - a < 2 * weave.end) continue;
-      const turned = weave.begin === 'head';
-      rows.push({ y: (row + 0.5) * pitch, row: rowOnScreen(row, count, weave), x0: turned ? weave.width - b : a, x1: turned ? weave.width - a : b });
+      if (b - a < 2) continue;
+      rows.push({ y: (row + 0.5) * pitch, row: rowOnScreen(row, count, weave), ...onScreen(shownEnds(a, b, woven, joinOf(shape), weave), weave) });
     }
   }
   return rows;
 }
 
-function snap(end: number, weave: Weave): number {
-  const pairs = Math.round(end / weave.grouped / 2);
-  return Math.max(0, Math.min(weave.width, pairs * 2 * weave.end));
+/** The nearest drawn end that is a multiple of two. */
+function snap(end: number, { ends, grouped }: Weave): number {
+  return Math.max(0, Math.min(ends, Math.round(end / grouped / 2) * 2));
+}
+
+/** Ends `a` up to (not including) `b` as they show in a row: dovetailed, the end at each side is shared with what lies beside. */
+function shownEnds(a: number, b: number, row: number, join: Meeting, { ends, joined }: Weave): Ends {
+  const all = { first: 0, last: ends - 1 };
+  const meeting = joined ? join : 'slit';
+  return {
+    first: a === 0 ? 0 : endsShown(all, a, meeting, row)[1].first,
+    last: b === ends ? ends - 1 : endsShown(all, b, meeting, row)[0].last,
+  };
+}
+
+function onScreen({ first, last }: Ends, { begin, width, end }: Weave): Pick<PickRow, 'x0' | 'x1'> {
+  const [from, to] = [first * end, Math.min(width, (last + 1) * end)];
+  return begin === 'head' ? { x0: width - to, x1: width - from } : { x0: from, x1: to };
 }
 
 function drawShape(shape: ClothShape, rows: readonly PickRow[], pitch: number, cover: number, weave: Weave, met: Weave): string {

@@ -99,6 +99,20 @@ describe('a cloth from a described piece and its plan', () => {
     expect(fringe.technique === 'rya' && fringe.groundColour).not.toBe(colour);
   });
 
+  it('knows how the ends of the warp are finished, what holds it, how colours meet and what stays plain', () => {
+    const own = clothOf(pieceWith({
+      size: { widthMm: 300, heightMm: 340 }, finish: { bottom: 'twisted' }, dowel: { diameterMm: 12, fixing: 'tied' },
+      bands: [
+        { technique: 'rya', name: 'fringe', yarn: 'ground', strands: 3, legEnds: 1, edgeEnds: 2, pileMm: 80, trimMm: 5, rows: 2, heightMm: 24 },
+        { technique: 'tabby', name: 'sky', yarn: 'ground', fill: true, shapes: [{ shape: 'rectangle', yarn: 'ground', baseMm: 60, heightMm: 60, join: 'dovetail' }] },
+      ],
+    }));
+    expect(own).toMatchObject({ finish: { bottom: 'twisted', fringeMm: 0, bundleEnds: 4 }, fixing: 'tied' });
+    expect(band(own, 'fringe')).toMatchObject({ edgeEnds: 2 });
+    expect(band(own, 'sky')).toMatchObject({ shapes: [{ join: 'dovetail' }] });
+    expect(cloth).not.toHaveProperty('finish');
+  });
+
   it('stays within the budget at every size it stands in a page', () => {
     for (const width of [136, 225, 456, 720]) expect(drawCloth(cloth, { id: 'low-tide', as: 'hanging', width }).length).toBeLessThan(60 * 1024);
     expect(drawCloth(cloth, { id: 'low-tide', as: 'loom', width: 400, woven: 0.6 }).length).toBeLessThan(60 * 1024);

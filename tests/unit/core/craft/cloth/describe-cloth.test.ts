@@ -34,6 +34,17 @@ describe('a cloth in words', () => {
     expect(describeCloth(piece, { units: 'in' })).toContain('15\u20093/4\u00a0in wide');
   });
 
+  it('says how the ends of the warp are finished and what holds it, where that is said', () => {
+    const finished = (finish: NonNullable<Parameters<typeof wovenPiece>[0]>['finish']): string => describeCloth(wovenPiece({ bands: [SOUMAK], ...(finish && { finish }) }));
+    expect(finished({ bottom: 'knotted', fringeMm: 70, bundleEnds: 6 })).toMatch(/Estuary\. Its warp ends are knotted in bundles of 6 and hang 7\u00a0cm\.$/);
+    expect(finished({ bottom: 'twisted', fringeMm: 90, bundleEnds: 8 })).toMatch(/ Its warp ends are twisted into cords of 8, 9\u00a0cm long\.$/);
+    expect(finished({ bottom: 'tucked', fringeMm: 0, bundleEnds: 4 })).toMatch(/ Its warp ends are tucked back into the cloth\.$/);
+    expect(finished({ bottom: 'plain', fringeMm: 30, bundleEnds: 4 })).toMatch(/ Its warp ends are left loose, 3\u00a0cm long\.$/);
+    expect(finished({ bottom: 'plain', fringeMm: 0, bundleEnds: 4 })).toMatch(/ Its warp ends are cut at the edge of the cloth\.$/);
+    expect(finished(undefined)).toMatch(/Estuary\.$/);
+    expect(describeCloth(wovenPiece({ bands: [SOUMAK], fixing: 'lashed' }))).toMatch(/ It is lashed to its dowel\.$/);
+  });
+
   it('counts cords', () => {
     expect(describeCloth(CORDS)).toBe('Three Knotted Cords, plant hanger, two cords, 76\u00a0cm long.');
   });

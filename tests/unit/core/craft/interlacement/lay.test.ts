@@ -1,5 +1,5 @@
 import { describe, expect, test } from 'vitest';
-import { basketRow, colourEnds, hemStitch, loopRow, onFace, rovingRow, ryaKnot, soumakRow, tabbyFace, tabbyRow, twinedRow, type Lay } from '#core/craft/interlacement/lay.ts';
+import { basketRow, colourEnds, endsShown, hemStitch, loopRow, onFace, rovingRow, ryaKnot, soumakRow, tabbyFace, tabbyRow, twinedRow, type Lay } from '#core/craft/interlacement/lay.ts';
 import { repeatWords } from '#core/craft/interlacement/lay-words.ts';
 
 const TEN = { first: 0, last: 9 };
@@ -75,6 +75,13 @@ describe('the other techniques', () => {
     expect(colourEnds(TEN, 5, 'slit').map(({ last }) => last)).toEqual([4, 9]);
     expect(colourEnds(TEN, 5, 'dovetail')).toEqual([{ first: 0, last: 5 }, { first: 5, last: 9 }]);
     expect(colourEnds(TEN, 5, 'interlock')[0]).toEqual({ first: 0, last: 4 });
+  });
+
+  test('of a shared end each row shows one colour, there and back in turns; together they always cover the row', () => {
+    const shared = [0, 1, 2, 3, 4, 5, -1].map((row) => endsShown(TEN, 5, 'dovetail', row));
+    expect(shared.map(([left]) => left.last)).toEqual([5, 5, 4, 4, 5, 5, 4]);
+    expect(shared.map(([left, right]) => right.first - left.last)).toEqual(shared.map(() => 1));
+    expect(endsShown(TEN, 5, 'slit', 0)).toEqual(colourEnds(TEN, 5, 'slit'));
   });
 
   test('what lies on one face is found in the order of the hand', () => {
