@@ -12,6 +12,7 @@ import { stepShape, trueArea } from '#core/craft/shapes.ts';
 import { COUNT_SYSTEMS, countFromTex, texFromCount } from '#core/craft/yarn/count.ts';
 import type { CountSystem, FrameLoomPiece } from '#core/craft/piece.ts';
 import { cases } from '../support/random-cases.ts';
+import { isWoven, pieces } from './random-pieces.ts';
 import { planOf, typedInInches } from './worked-piece.ts';
 
 const RUNS = { numRuns: cases(1500), seed: 20260821 };
@@ -178,49 +179,6 @@ describe('shapes', () => {
     expect(trueArea({ shape: 'circle', radiusMm: 10 })).toBeCloseTo(100 * Math.PI, 9);
   });
 });
-
-/** Pieces that can be woven: one band of each kind, over a random loom. */
-const pieces = fc
-  .record({
-    widthMm: between(120, 600),
-    heightMm: between(150, 800),
-    nailPitchMm: between(6, 20),
-    warping: fc.constantFrom('zigzag', 'two-nail'),
-    endsTogether: fc.constantFrom(1, 2),
-    parity: fc.constantFrom('any', 'even', 'odd'),
-    warpTex: between(200, 900),
-    weftTex: between(150, 900),
-    beat: between(0.4, 1.6),
-    drawIn: between(0, 0.1),
-    relaxation: between(0, 0.1),
-    margin: between(0, 0.3),
-    shapeShare: between(0.1, 0.8),
-    join: fc.constantFrom('slit', 'dovetail', 'interlock'),
-  })
-  .map((of) => ({
-    craft: 'frame-loom',
-    size: { widthMm: of.widthMm, heightMm: of.heightMm },
-    loom: { nailPitchMm: of.nailPitchMm, warping: of.warping, insideHeightMm: of.heightMm * 1.5 + 300 },
-    warp: { yarn: { tex: of.warpTex }, endsTogether: of.endsTogether, parity: of.parity },
-    beat: { picksPerWeftDiameter: of.beat },
-    allowances: { drawIn: of.drawIn, relaxation: of.relaxation, marginWeft: of.margin, marginWarp: of.margin },
-    yarns: { ground: { tex: of.weftTex }, figure: { tex: of.weftTex * 1.1 }, fringe: { tex: 800 } },
-    bands: [
-      { technique: 'hem-stitch', yarn: 'ground', bundleEnds: 2, reachPicks: 2 },
-      { technique: 'rya', yarn: 'fringe', strands: 3, legEnds: 1, pileMm: 80, trimMm: 5, rows: 2, heightMm: 12 },
-      {
-        technique: 'tabby',
-        yarn: 'ground',
-        heightMm: 60,
-        shapes: [{ shape: 'triangle', yarn: 'figure', baseMm: of.widthMm * of.shapeShare, heightMm: 50, join: of.join }],
-      },
-      { technique: 'soumak', yarn: 'fringe', over: 4, back: 2, rows: 2, tabbyBetween: 1, tabbyYarn: 'ground' },
-      { technique: 'tabby', yarn: 'ground', fill: true },
-    ],
-  }));
-
-type TriedPiece = typeof pieces extends fc.Arbitrary<infer P> ? P : never;
-const isWoven = (piece: TriedPiece): boolean => planPiece(piece).ok;
 
 /** All numbers of a plan, in order. */
 const numbersIn = (value: unknown): number[] =>

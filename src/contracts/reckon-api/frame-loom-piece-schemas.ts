@@ -176,6 +176,16 @@ const ALLOWANCES: Readonly<Record<string, Schema>> = {
   marginWarp: number('Share bought on top; 0.1.', { min: 0, max: 1 }),
 };
 
+/** Which numbers belong to which mode, and whose rows may go without a beat. */
+const NUMBERS_OF_MODE: Schema = {
+  oneOf: [
+    { properties: { mode: { const: 'straight-warp' }, weftWaveMm: false, takeUp: false, warpTakeUp: false }, required: ['beat'] },
+    { properties: { mode: { const: 'balanced' }, weftWaveMm: false, takeUp: false, warpTakeUp: false }, required: ['mode'] },
+    { properties: { mode: { const: 'given' }, takeUp: false, warpTakeUp: false }, required: ['mode', 'weftWaveMm', 'beat'] },
+    { properties: { mode: { const: 'measured' }, weftWaveMm: false }, required: ['mode', 'beat'] },
+  ],
+};
+
 export const FRAME_LOOM_PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
   ...BANDS,
   Band: toldBy('technique', BAND_OF),
@@ -192,12 +202,15 @@ export const FRAME_LOOM_PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
       loom: ref('Loom'),
       warp: ref('Warp'),
       beat: closed(
-        'How closely rows lie: by the yarn’s thickness (hanging 0.7, tapestry 1.1, rug 1.45), or as counted on a swatch.',
+        'How closely rows lie: by the yarn’s thickness (hanging 0.7, tapestry 1.1, rug 1.45), or as counted on a swatch. Balanced cloth without it has rows as far apart as its ends.',
         { picksPerWeftDiameter: number('Rows in one compressed weft thickness.', { min: 0.2, max: 2 }), picksPerCm: number('Rows in a centimetre.', { above: 0, max: 200 }) },
         ['picksPerWeftDiameter', 'picksPerCm'],
         exactlyOne(['picksPerWeftDiameter'], ['picksPerCm']),
       ),
-      mode: choice('Which yarn bends; `straight-warp` when missing.', 'straight-warp', 'balanced'),
+      mode: choice('Which yarn bends: the weft round a straight warp, both alike, the weft as high as is given, or as it was measured; `straight-warp` when missing.', 'straight-warp', 'balanced', 'given', 'measured'),
+      weftWaveMm: allowanceMm('Height of the weft’s wave, at most warp and weft together; of `given` only.'),
+      takeUp: number('What a pick drawn out straight is longer than its cloth; 0.1, with a warning, when missing. Of `measured` only.', { min: 0, max: 0.6 }),
+      warpTakeUp: number('The same of the warp; 0 when missing, 0.1 beside a missing `takeUp`. Of `measured` only.', { min: 0, max: 0.6 }),
       allowances: closed('Each with its default.', ALLOWANCES, Object.keys(ALLOWANCES)),
       dowel: closed('The rod it hangs from.', { fixing: choice('How the cloth is held to it; `slipped` when missing.', 'slipped', 'tied', 'lashed'), diameterMm: lengthMm('Thickness.', 200), lengthMm: number('Length; the width and 40 mm on each side when missing.', { min: 60, max: LONGEST_MM }) }, ['fixing', 'lengthMm']),
       finish: ref('Finish'),
@@ -206,6 +219,7 @@ export const FRAME_LOOM_PIECE_SCHEMAS: Readonly<Record<string, Schema>> = {
       yarns: byRole(ref('Yarn'), { maxProperties: 60 }),
       bands: list('In the order they are woven.', ref('Band'), { minItems: 1, maxItems: 200 }),
     },
-    ['mode', 'allowances', 'dowel', 'finish', 'hangs', 'seed'],
+    ['beat', 'mode', 'weftWaveMm', 'takeUp', 'warpTakeUp', 'allowances', 'dowel', 'finish', 'hangs', 'seed'],
+    NUMBERS_OF_MODE,
   ),
 };

@@ -20,9 +20,15 @@ export const LOFT_RATIO = 1.43;
 /** Tightness (d₁ + d₂)/p of weft-faced cloth. D: published projects lie between 0.3 and 0.42. */
 export const TIGHTNESS = { target: 0.4, loose: 0.25, jam: 1 } as const;
 
+/**
+ * Take-up of both yarns of a balanced cloth when nothing is known. F: practice says about a tenth. D: Peirce's wave at
+ * a sett of half the wraps gives 0.065 with the yarn beaten down and 0.145 with it free.
+ */
+export const TAKE_UP_UNKNOWN = { likely: 0.1, low: 0.065, high: 0.145 } as const;
+
 export const DEFAULT_ALLOWANCES = {
-  /** P: 0 to 3 % weft-faced, 4 to 10 % balanced; 4.5 and 7.4 % measured (F). */
-  drawIn: { 'straight-warp': 0.02, balanced: 0.08 },
+  /** P: 0 to 3 % weft-faced, 4 to 10 % balanced; 4.5 and 7.4 % measured (F). Who gives or measures the bend says the draw-in as well, or has the weft-faced one. */
+  drawIn: { 'straight-warp': 0.02, balanced: 0.08, given: 0.02, measured: 0.02 },
   /** P: cotton warp on a frame; an elastic wool warp may take 13 % (F). */
   relaxation: 0.02,
   /** A hanging is not washed. */

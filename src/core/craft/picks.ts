@@ -1,19 +1,36 @@
 /** One pick of tabby: how close rows lie, and how much yarn crosses the cloth. */
-import type { Beat, WeaveMode } from '#core/craft/piece.ts';
+import { TAKE_UP_UNKNOWN } from '#core/craft/defaults.ts';
+import type { Beat } from '#core/craft/piece.ts';
 import { waveOf, weftWaveRange, type WaveRange } from '#core/craft/crimp.ts';
+import type { MeasuredWeave, Weave } from '#core/craft/weave.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
 
 /** Picks in one compressed weft diameter: hanging 0.7, firm tapestry 1.1, rug 1.45. Round yarns reach at most 2. */
 export const BEAT_RANGE = { min: 0.2, max: 2 } as const;
+
+/** How close rows lie: beaten so firmly, counted, or as far apart as the ends. */
+export type RowBeat = Beat | 'as-ends';
 
 /** From row to row, mm. A count on a swatch replaces the rule. */
 export function pickSpacing(beat: Beat, weftDiameterMm: number): number {
   return beat.picksPerCm === undefined ? weftDiameterMm / beat.picksPerWeftDiameter : 10 / beat.picksPerCm;
 }
 
+/** The same where a balanced cloth says no beat: its rows lie as far apart as its ends. */
+export function spacingOfRows(beat: RowBeat, weftDiameterMm: number, endSpacingMm: number): number {
+  return beat === 'as-ends' ? endSpacingMm : pickSpacing(beat, weftDiameterMm);
+}
+
 /** Picks in one weft diameter, from picks counted over a length. */
 export function beatOfSwatch(picks: number, overMm: number, weftDiameterMm: number): number {
   return (picks * weftDiameterMm) / overMm;
+}
+
+export interface WeftBend {
+  /** Height of the weft's wave. */
+  readonly waveMm: number;
+  /** Steepest angle of the weft, radians. */
+  readonly angleRad: number;
 }
 
 export interface PickGeometry {
@@ -22,11 +39,11 @@ export interface PickGeometry {
   readonly pickSpacingMm: number;
   /** D/p */
   readonly tightness: number;
+  /** Of the weft. */
   readonly crimp: number;
-  /** Height of the weft's wave. */
-  readonly waveMm: number;
-  /** Steepest angle of the weft, radians. */
-  readonly angleRad: number;
+  readonly warpCrimp: number;
+  /** The weft's wave; missing where its take-up was measured. */
+  readonly bend?: WeftBend;
   /** Weft from one working end to the next. */
   readonly stepMm: number;
   /** Weft round the end at a selvedge. */
@@ -35,13 +52,12 @@ export interface PickGeometry {
   readonly clamped: boolean;
 }
 
-export interface Crossing {
+export type Crossing = Weave & {
   readonly spacingMm: number;
   readonly warpDiameterMm: number;
   readonly weftDiameterMm: number;
   readonly pickSpacingMm: number;
-  readonly mode: WeaveMode;
-}
+};
 
 interface ChosenWave {
   readonly heightMm: number;
@@ -49,12 +65,19 @@ interface ChosenWave {
   readonly clamped: boolean;
 }
 
+/** Whether the yarns leave room for a wave so high. */
+export function isInRange(heightMm: number, { min, max }: WaveRange, D: number): boolean {
+  const hair = 1e-9 * D;
+  return heightMm >= min - hair && heightMm <= max + hair;
+}
+
 /**
  * Straight warp leaves the whole wave D to the weft, or jams; in balanced cloth both share
- * it as nearly as they can.
+ * it as nearly as they can; a given wave stands, or jams.
  */
-export function chooseWeftWave(range: WaveRange, D: number, mode: WeaveMode): ChosenWave | undefined {
-  if (mode === 'straight-warp') return range.max < D * (1 - 1e-9) ? undefined : { heightMm: D, clamped: false };
+export function chooseWeftWave(range: WaveRange, D: number, weave: Exclude<Weave, MeasuredWeave>): ChosenWave | undefined {
+  if (weave.mode === 'straight-warp') return range.max < D * (1 - 1e-9) ? undefined : { heightMm: D, clamped: false };
+  if (weave.mode === 'given') return isInRange(weave.weftWaveMm, range, D) ? { heightMm: Math.min(D, weave.weftWaveMm), clamped: false } : undefined;
   const heightMm = Math.min(range.max, Math.max(range.min, D / 2));
   return { heightMm, clamped: heightMm !== D / 2 };
 }
@@ -64,23 +87,34 @@ export function turnLength(diameterSumMm: number, pickSpacingMm: number): number
   return Math.hypot((Math.PI * diameterSumMm) / 2, pickSpacingMm);
 }
 
-/** Undefined where the yarns jam. */
+type Bending = Pick<PickGeometry, 'crimp' | 'warpCrimp' | 'bend' | 'stepMm' | 'clamped'>;
+
+function bendingOf(crossing: Crossing, D: number): Bending | undefined {
+  const { spacingMm, pickSpacingMm } = crossing;
+  if (crossing.mode === 'measured') {
+    const unknown = TAKE_UP_UNKNOWN.likely;
+    const { takeUp: crimp = unknown, warpTakeUp: warpCrimp = crossing.takeUp === undefined ? unknown : 0 } = crossing;
+    return { crimp, warpCrimp, stepMm: spacingMm * (1 + crimp), clamped: false };
+  }
+  const range = weftWaveRange(D, spacingMm, pickSpacingMm);
+  const chosen = range && chooseWeftWave(range, D, crossing);
+  const weft = chosen && waveOf(spacingMm, D, chosen.heightMm);
+  const warp = chosen && waveOf(pickSpacingMm, D, D - chosen.heightMm);
+  if (chosen === undefined || weft === undefined || warp === undefined) return undefined;
+  const bend = { waveMm: chosen.heightMm, angleRad: weft.angleRad };
+  return { crimp: weft.crimp, warpCrimp: warp.crimp, bend, stepMm: weft.lengthMm, clamped: chosen.clamped };
+}
+
+/** Undefined where the yarns jam; a measured take-up is taken at its word. */
 export function pickGeometry(crossing: Crossing): PickGeometry | undefined {
   const D = crossing.warpDiameterMm + crossing.weftDiameterMm;
-  const range = weftWaveRange(D, crossing.spacingMm, crossing.pickSpacingMm);
-  const chosen = range && chooseWeftWave(range, D, crossing.mode);
-  const wave = chosen && waveOf(crossing.spacingMm, D, chosen.heightMm);
-  if (chosen === undefined || wave === undefined) return undefined;
-  return {
+  const bending = bendingOf(crossing, D);
+  return bending && {
     diameterSumMm: D,
     pickSpacingMm: crossing.pickSpacingMm,
     tightness: D / crossing.spacingMm,
-    crimp: wave.crimp,
-    waveMm: chosen.heightMm,
-    angleRad: wave.angleRad,
-    stepMm: wave.lengthMm,
     turnMm: turnLength(D, crossing.pickSpacingMm),
-    clamped: chosen.clamped,
+    ...bending,
   };
 }
 

@@ -7,6 +7,8 @@
  * and margins are fractions: 0.02 is two per cent.
  */
 
+import type { WeaveNumbers } from '#core/craft/weave.ts';
+
 export type CountSystem =
   | 'ne-cotton'
   | 'spun-silk'
@@ -102,8 +104,6 @@ export interface Warp {
 export type Beat =
   | { readonly picksPerWeftDiameter: number; readonly picksPerCm?: never }
   | { readonly picksPerCm: number; readonly picksPerWeftDiameter?: never };
-
-export type WeaveMode = 'straight-warp' | 'balanced';
 
 export interface Allowances {
   readonly drawIn?: number;
@@ -276,14 +276,14 @@ export interface BandByTechnique {
 export type TechniqueName = keyof BandByTechnique;
 export type Band = BandByTechnique[TechniqueName];
 
-export interface FrameLoomPiece {
+export interface FrameLoomPiece extends WeaveNumbers {
   readonly craft: 'frame-loom';
   /** Finished size of the woven cloth, without fringe. */
   readonly size: { readonly widthMm: number; readonly heightMm: number };
   readonly loom: Loom;
   readonly warp: Warp;
-  readonly beat: Beat;
-  readonly mode?: WeaveMode;
+  /** Missing only in balanced cloth, whose rows then lie as far apart as the ends. */
+  readonly beat?: Beat;
   readonly allowances?: Allowances;
   readonly dowel?: Dowel;
   readonly finish?: Finish;

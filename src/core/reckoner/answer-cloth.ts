@@ -61,7 +61,7 @@ function warpCrimp({ piece, plan: { weft, ends } }: Made, dressed: DressedWarp):
 
 function rowLines(made: Made, dressed: DressedWarp, units: Units): AnswerLine[] {
   const { piece, plan: { weft, ends } } = made;
-  const trust = piece.beat.picksPerCm === undefined ? 'formula' : 'measured';
+  const trust = piece.beat?.picksPerCm === undefined ? 'formula' : 'measured';
   const ofWarp = warpCrimp(made, dressed);
   const perUnit = units === 'in' ? { value: MM_PER_INCH / weft.pickSpacingMm, unit: 'to the inch' } : { value: 10 / weft.pickSpacingMm, unit: 'to the cm' };
   return [
@@ -80,7 +80,7 @@ function reserveLines(made: Made): AnswerLine[] {
   if (yarn === undefined) return [];
   return [
     stepped('yarns.ground.netMm', { label: 'The cloth itself takes', value: lengthOf(yarn.netMm, 'yarn'), how: 'rows × weft of one row, and tails where a new shuttle begins', trust: 'formula' }),
-    { label: 'Reserve on top', value: { kind: 'share', share: marginWeft }, how: piece.beat.picksPerCm === undefined ? 'so that it suffices in 95 of 100 pieces; rows counted on a swatch need less' : 'so that it suffices in 95 of 100 pieces, with rows counted', trust: 'formula' },
+    { label: 'Reserve on top', value: { kind: 'share', share: marginWeft }, how: piece.beat?.picksPerCm === undefined ? 'so that it suffices in 95 of 100 pieces; rows counted on a swatch need less' : 'so that it suffices in 95 of 100 pieces, with rows counted', trust: 'formula' },
     ...amountLine(made, 'rows-per-load', 'Rows one shuttle weaves'),
     { label: 'Shuttles to fill', value: { kind: 'count', count: yarn.loads, one: 'shuttle', many: 'shuttles' }, how: 'yarn of all rows ÷ yarn on one shuttle', trust: 'practice', step: 'yarns.ground.loads' },
   ];

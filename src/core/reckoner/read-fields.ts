@@ -1,7 +1,8 @@
 /** From what was typed to what the reckoning takes. */
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
-import type { Beat, CountSystem, EndsTogether, Loom, Parity, Warp, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Beat, CountSystem, EndsTogether, Loom, Parity, Warp, Yarn } from '#core/craft/piece.ts';
+import type { WeaveMode } from '#core/craft/weave.ts';
 import { METRES_PER_YARD } from '#core/craft/yarn/count.ts';
 import { YARN_CLASSES } from '#core/craft/yarn/classes.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';

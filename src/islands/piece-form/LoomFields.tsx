@@ -1,4 +1,4 @@
-import { ALLOWANCES, BEAT_BY, ENDS_TOGETHER, FINISH, FIXING, FRINGE, fringeAsked, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
+import { ALLOWANCES, askedOfMode, BEAT_BY, ENDS_TOGETHER, FINISH, FIXING, FRINGE, fringeAsked, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OF_MODE, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { LookButton } from './ActButton.tsx';
 import { AskedField, AskedFields } from './AskedField.tsx';
@@ -49,16 +49,18 @@ export function BeatFields() {
   const { typed: { texts } } = useHands();
   const by = textOf(texts, BEAT_BY.key);
   const number = by === 'swatch' ? SWATCH_BEAT : by === 'own' ? OWN_BEAT : null;
-  const others = Object.fromEntries([SWATCH_BEAT, OWN_BEAT].map(({ key }) => [key, textOf(texts, key)]));
+  const ofMode = askedOfMode(texts);
+  const others = Object.fromEntries([SWATCH_BEAT, OWN_BEAT, ...OF_MODE].map(({ key }) => [key, textOf(texts, key)]));
   return (
     <section aria-labelledby="beat-title">
       <h2 className="h3" id="beat-title">Beat</h2>
       <div className="edit">
         <AskedField asked={BEAT_BY} texts={texts} className="whole" />
         {number !== null && <AskedField asked={number} texts={texts} className="whole" />}
-        <LookButton to="beat-title">Show the number it asks</LookButton>
+        <LookButton to="beat-title">Show the numbers it asks</LookButton>
         <AskedField asked={MODE} texts={texts} className="whole" />
-        <HiddenTexts texts={others} prefix="" shown={new Set(number === null ? [] : [number.key])} />
+        <AskedFields asked={ofMode} texts={texts} className="half" />
+        <HiddenTexts texts={others} prefix="" shown={new Set([...(number === null ? [] : [number]), ...ofMode].map(({ key }) => key))} />
       </div>
     </section>
   );

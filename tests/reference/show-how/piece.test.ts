@@ -7,6 +7,7 @@ import type { Working } from '#core/craft/show-how/working.ts';
 import { cases } from '../../support/random-cases.ts';
 import { expectClose } from '../close.ts';
 import workedPiece from '../worked-piece.json' with { type: 'json' };
+import { isWoven, richPieces } from '../random-pieces.ts';
 import { figures, TABLE } from '../worked-piece-table.ts';
 import { IMPERIAL, planOf } from '../worked-piece.ts';
 import { expectReachable, faultsOf, workingsOf } from './follow.ts';
@@ -149,3 +150,30 @@ test('of a thousand pieces that can be woven every number is explained', () => {
     expectReachable(workings, planOf(piece), /^bands\.\d+\.index$/u);
   }), { numRuns: cases(1000), seed: 20260821 });
 }, 300_000);
+
+test('of a thousand pieces bent, finished and hung in every way every number is explained', () => {
+  fc.assert(
+    fc.property(richPieces, (piece) => {
+      fc.pre(isWoven(piece));
+      const workings = workingsOf(explainPiece(piece));
+      expect(faultsOf(workings, piece)).toEqual([]);
+      expectReachable(workings, planOf(piece), /^bands\.\d+\.index$/u);
+    }),
+    { numRuns: cases(1000), seed: 20260821 },
+  );
+}, 300_000);
+
+const standing = (piece: unknown, id: string, symbol: string) => {
+  const input = workingsOf(explainPiece(piece)).find((working) => working.id === id)?.inputs.find((one) => one.symbol === symbol);
+  return input?.path ?? input?.source;
+};
+
+test('what finish, tying, strands and take-up bring along says its own source', () => {
+  const piece = (more: object) => ({ ...workedPiece, loom: { ...workedPiece.loom, insideHeightMm: 900 }, ...more });
+  expect(standing(piece({ finish: { bottom: 'knotted', fringeMm: 80 } }), 'loom.finishMm', 'n')).toContain('overhand knot');
+  expect(standing(piece({ finish: { bottom: 'knotted', fringeMm: 80 } }), 'loom.finishMm', 'f')).toBe('/finish/fringeMm');
+  expect(standing(piece({ finish: { bottom: 'twisted', fringeMm: 80 } }), 'loom.finishMm', 'r')).toContain('twisted cord');
+  expect(standing(piece({ dowel: { diameterMm: 12, fixing: 'tied' } }), 'loom.topForTyingMm', 'l')).toContain('tied to the rod');
+  expect(standing(piece({ mode: 'measured', takeUp: 0.07 }), 'weft.crimp', 'c')).toBe('/takeUp');
+  expect(standing(piece({ mode: 'measured' }), 'weft.crimp', 'c')).toContain('measure a swatch');
+});

@@ -130,6 +130,13 @@ describe('reader and schemas', () => {
   };
   const FULL: readonly (readonly [CraftName, Json])[] = [['frame-loom', FULL_PIECE], ['macrame', FULL_MACRAME], ['macrame', RING], ['dyeing', FULL_DYEING], ['rigid-heddle', FULL_HEDDLE]];
   const POINTS = { what: 'shape', shape: 'points', points: [{ xMm: 0, yMm: 0 }, { xMm: 40, yMm: 0 }, { xMm: 20, yMm: 30 }], spacingMm: 5, pickSpacingMm: 2, ends: 62, symmetric: false };
+  const { beat: _, ...closeAsEnds } = FULL_PIECE.piece;
+  /** The other ways of bending, each with all its numbers. */
+  const BENT_OTHERWISE = [
+    { ...FULL_PIECE, piece: { ...FULL_PIECE.piece, mode: 'given', weftWaveMm: 1.8 } },
+    { ...FULL_PIECE, piece: { ...FULL_PIECE.piece, mode: 'measured', takeUp: 0.08, warpTakeUp: 0.01 } },
+    { ...FULL_PIECE, piece: { ...closeAsEnds, mode: 'balanced' } },
+  ];
   const SOUND = [...FULL.map(([, question]) => question), POINTS, ...WIRE_ROWS.filter(({ refused }) => refused === undefined).map(({ question }) => question)] as readonly Json[];
 
   test('there is a full piece of every craft', () => {
@@ -180,6 +187,12 @@ describe('reader and schemas', () => {
   test.each(FULL)('refuse the same missing values, kinds and limits, at every place of a piece of %s', (_, question) => {
     for (const place of placesOf(question).filter((path) => path.length > 0 && path.join() !== 'what')) {
       for (const value of othersFor(atPlace(question, place))) agree(changed(question, place, value));
+    }
+  }, 300_000);
+
+  test.each(BENT_OTHERWISE.map((question) => [question.piece.mode, question]))('refuse the same where the bend is %s', (_mode, question) => {
+    for (const key of ['mode', 'beat', 'weftWaveMm', 'takeUp', 'warpTakeUp']) {
+      for (const value of othersFor(0.5)) agree(changed(question as unknown as Json, ['piece', key], value));
     }
   });
 

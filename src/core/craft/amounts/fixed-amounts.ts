@@ -22,7 +22,7 @@ type FixedAmount = (of: PlannedPiece) => Reckoned | undefined;
 
 /** A swatch that was counted beats the rule of thumb for how close rows lie. */
 export function beatTrust({ beat }: FrameLoomPiece): Trust {
-  return beat.picksPerCm === undefined ? 'formula' : 'measured';
+  return beat?.picksPerCm === undefined ? 'formula' : 'measured';
 }
 
 const settings = ({ piece }: PlannedPiece): ReturnType<typeof settingsOf> =>

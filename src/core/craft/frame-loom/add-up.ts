@@ -1,6 +1,6 @@
 /** Adding the plan up, once everything is sound and fits together. */
 import { HANGING, SPACER_CARD_EXTRA_MM, TIE_MM } from '#core/craft/defaults.ts';
-import { countWarp, countYarn } from '#core/craft/frame-loom/count-yarn.ts';
+import { countWarp, countYarn, warpRun } from '#core/craft/frame-loom/count-yarn.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import type { PieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import type { Settings } from '#core/craft/frame-loom/settings.ts';
@@ -115,7 +115,8 @@ export function weaveBands({ stacked, laid }: PieceOnLoom): readonly WovenBand[]
 export function addUp(piece: PieceOnLoom, findings: Findings): Omit<FrameLoomPlan, 'warnings'> {
   const { dressed, laid, height } = piece;
   const bands = weaveBands(piece);
-  const warp = countWarp(piece.warp, piece.loom, dressed, piece.settings, findings);
+  const run = warpRun(piece.warp, piece.loom, dressed, height.heightOnLoomMm, mainWeft(bands, laid).geometry.warpCrimp);
+  const warp = countWarp(piece.warp, run, dressed, piece.settings, findings);
   const yarns = planYarns(bands, piece, findings);
   const massG = Object.values(yarns).reduce((sum, yarn) => sum + yarn.massG, warp.massG);
   return {

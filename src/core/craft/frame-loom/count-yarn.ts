@@ -8,7 +8,7 @@ import { ballsFor, withMargin } from '#core/craft/purchase.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { ceilSafe } from '#core/craft/rounding.ts';
 import { threadOn, type DressedLoom, type Woven, type YarnUse } from '#core/craft/techniques/technique.ts';
-import { warpLength } from '#core/craft/warp.ts';
+import { warpLength, type WarpRun } from '#core/craft/warp.ts';
 import { massOf } from '#core/craft/yarn/thread.ts';
 import { TIE_MM } from '#core/craft/defaults.ts';
 
@@ -33,17 +33,22 @@ function toBuy({ yarn, tex, netMm, margin, path }: Skein, findings: Findings): W
   return { ...bought, balls: balls.count };
 }
 
-/** Warp yarn: it spans the whole frame, used or not. */
-export function countWarp(warp: Warp, loom: Loom, dressed: DressedWarp, settings: Settings, findings: Findings): WarpPlan {
-  const threadMm = warpLength({
+/** The way of all ends; `crimp` is what they bend in the cloth, that of the picks most rows are woven in. */
+export function warpRun(warp: Warp, loom: Loom, dressed: DressedWarp, wovenMm: number, crimp: number): WarpRun {
+  return {
     ends: dressed.ends.count,
     frameHeightMm: loom.insideHeightMm,
     nailDiameterMm: dressed.nailDiameterMm,
     warpDiameterMm: dressed.thread.compressedMm,
     tieMm: warp.tieMm ?? TIE_MM,
-  });
-  const { tex, strands } = dressed.thread;
-  return toBuy({ yarn: warp.yarn, tex, netMm: threadMm * strands, margin: settings.marginWarp, path: '/warp/yarn' }, findings);
+    wovenMm,
+    crimp,
+  };
+}
+
+/** Warp yarn: it spans the whole frame, used or not. */
+export function countWarp(warp: Warp, run: WarpRun, { thread: { tex, strands } }: DressedWarp, settings: Settings, findings: Findings): WarpPlan {
+  return toBuy({ yarn: warp.yarn, tex, netMm: warpLength(run) * strands, margin: settings.marginWarp, path: '/warp/yarn' }, findings);
 }
 
 const sum = (uses: readonly YarnUse[], of: 'threadMm' | 'yarnMm'): number => uses.reduce((total, use) => total + use[of], 0);

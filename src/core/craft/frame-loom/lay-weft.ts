@@ -1,8 +1,10 @@
 /** Every yarn as it lies between these ends: does it close, does it beat down, does the warp show. */
 import { ASHENHURST_K, TIGHTNESS } from '#core/craft/defaults.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
-import type { Beat, WeaveMode, Yarn } from '#core/craft/piece.ts';
-import { BEAT_RANGE, beatOfSwatch, pickGeometry, pickSpacing } from '#core/craft/picks.ts';
+import { admitsWave } from '#core/craft/given-wave.ts';
+import type { Yarn } from '#core/craft/piece.ts';
+import { BEAT_RANGE, beatOfSwatch, pickGeometry, spacingOfRows, type RowBeat } from '#core/craft/picks.ts';
+import type { Weave } from '#core/craft/weave.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import { adviseSpacing, spacingThatSuits, strandsFor, tightness } from '#core/craft/sett.ts';
@@ -76,14 +78,16 @@ function reportWeftFaced(crossed: Crossed, findings: Findings): void {
 }
 
 interface Cloth {
-  readonly beat: Beat;
-  readonly mode: WeaveMode;
+  readonly beat: RowBeat;
+  readonly weave: Weave;
 }
 
 /** The picks of one yarn, unless it jams. `spacing` from row to row. */
-function layYarn(crossed: Crossed, spacing: number, mode: WeaveMode, findings: Findings): LaidPicks | undefined {
+function layYarn(crossed: Crossed, spacing: number, weave: Weave, findings: Findings): LaidPicks | undefined {
   const { path, pick, thread, workingEnds, spacingMm, warpMm } = crossed;
-  const geometry = pickGeometry({ spacingMm, warpDiameterMm: warpMm, weftDiameterMm: thread.compressedMm, pickSpacingMm: spacing, mode });
+  const weftMm = thread.compressedMm;
+  if (weave.mode === 'given' && !admitsWave(weave.weftWaveMm, { diameterSumMm: warpMm + weftMm, warpSpacingMm: spacingMm, weftSpacingMm: spacing }, '/weftWaveMm', findings)) return undefined;
+  const geometry = pickGeometry({ spacingMm, warpDiameterMm: warpMm, weftDiameterMm: weftMm, pickSpacingMm: spacing, ...weave });
   if (geometry === undefined) {
     reportJam(crossed, findings);
     return undefined;
@@ -95,14 +99,14 @@ function layYarn(crossed: Crossed, spacing: number, mode: WeaveMode, findings: F
   if (geometry.clamped) {
     findings.warn('W_CLAMPED', path, 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
   }
-  if (mode === 'straight-warp') reportWeftFaced(crossed, findings);
+  if (weave.mode === 'straight-warp') reportWeftFaced(crossed, findings);
   return { ...geometry, pick, workingEnds, spacingMm };
 }
 
 /** A swatch was counted with the yarn as it is taken together otherwise; rows of more strands lie as much further apart. */
-function rowSpacing(beat: Beat, usual: Thread, { thread }: Crossed): number {
-  const scale = beat.picksPerCm === undefined ? 1 : thread.compressedMm / usual.compressedMm;
-  return pickSpacing(beat, thread.compressedMm) * scale;
+function rowSpacing(beat: RowBeat, usual: Thread, { thread, spacingMm }: Crossed): number {
+  const isCounted = beat !== 'as-ends' && beat.picksPerCm !== undefined;
+  return spacingOfRows(beat, thread.compressedMm, spacingMm) * (isCounted ? thread.compressedMm / usual.compressedMm : 1);
 }
 
 /** Every way in which yarn is woven in picks, by its key; one that jams is reported and missing. */
@@ -110,7 +114,7 @@ export function layWeft(
   ways: ReadonlyMap<string, PickOf>,
   threads: ReadonlyMap<string, Thread>,
   warp: DressedWarp,
-  { beat, mode }: Cloth,
+  { beat, weave }: Cloth,
   findings: Findings,
 ): ReadonlyMap<string, LaidPicks> {
   const picks = new Map<string, LaidPicks>();
@@ -118,7 +122,7 @@ export function layWeft(
     const thread = threads.get(pick.role);
     if (thread === undefined) continue;
     const crossed = crossedBy(pick, thread, warp);
-    const geometry = layYarn(crossed, rowSpacing(beat, thread, crossed), mode, findings);
+    const geometry = layYarn(crossed, rowSpacing(beat, thread, crossed), weave, findings);
     if (geometry !== undefined) picks.set(key, geometry);
   }
   return picks;

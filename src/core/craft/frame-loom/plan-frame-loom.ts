@@ -30,8 +30,8 @@ function picksToLay({ inPicks, named }: UsedRoles): ReadonlyMap<string, PickOf> 
 }
 
 export function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, used: UsedRoles, findings: Findings): DressedLoom | undefined {
-  const { size, beat, mode } = parts;
-  if (size === undefined || beat === undefined) return undefined;
+  const { size, beat, weave } = parts;
+  if (size === undefined || beat === undefined || weave === undefined) return undefined;
   const threads = threadsOf(parts.yarns);
   return {
     workingEnds: warp.ends.working,
@@ -41,7 +41,7 @@ export function layOn(warp: DressedWarp, parts: PieceParts, settings: Settings, 
     beat,
     tailMm: settings.tailMm,
     threads,
-    picks: layWeft(picksToLay(used), threads, warp, { beat, mode }, findings),
+    picks: layWeft(picksToLay(used), threads, warp, { beat, weave }, findings),
   };
 }
 
@@ -65,7 +65,7 @@ function warnOfShortEnds({ allowances, warp }: PieceParts, { finish }: Edges, fi
 
 export function settingsFrom({ allowances, mode, beat }: PieceParts): Settings | undefined {
   // A refused beat only leaves the margin's default open, which checking fit does not need.
-  return allowances === undefined ? undefined : settingsOf(allowances, mode, beat ?? { picksPerWeftDiameter: 1 });
+  return allowances === undefined ? undefined : settingsOf(allowances, mode, beat);
 }
 
 /** Reads a piece, dresses its loom and lays and stacks its weft; undefined, with a problem among the findings, if it cannot be woven. */

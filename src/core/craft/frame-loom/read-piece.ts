@@ -2,11 +2,14 @@
  * Reading a frame-loom piece. Every part is read for itself, so that all that is wrong
  * is told at once, and what is sound can still be checked against its neighbours.
  */
-import type { Allowances, Band, Beat, Dowel, Finish, FinishWay, Fixing, Loom, FrameLoomPiece, Warp, Warping, WeaveMode, Yarn } from '#core/craft/piece.ts';
+import type { Allowances, Band, Dowel, Finish, FinishWay, Fixing, Loom, FrameLoomPiece, Warp, Warping, Yarn } from '#core/craft/piece.ts';
+import type { Weave, WeaveMode } from '#core/craft/weave.ts';
+import { TAKE_UP_UNKNOWN } from '#core/craft/defaults.ts';
+import { roundHalfUp } from '#core/craft/rounding.ts';
 import type { Edges } from '#core/craft/frame-loom/room.ts';
 import type { LoomKind } from '#core/craft/looms/loom-kind.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
-import { BEAT_RANGE } from '#core/craft/picks.ts';
+import { BEAT_RANGE, type RowBeat } from '#core/craft/picks.ts';
 import { Fields, type NumberRule } from '#core/craft/reading/fields.ts';
 import { below, type Findings } from '#core/craft/reading/findings.ts';
 import { present } from '#core/craft/reading/present.ts';
@@ -20,8 +23,10 @@ export interface PieceParts {
   readonly size: FrameLoomPiece['size'] | undefined;
   readonly loom: Loom | undefined;
   readonly warp: Warp | undefined;
-  readonly beat: Beat | undefined;
+  readonly beat: RowBeat | undefined;
   readonly mode: WeaveMode;
+  /** The mode with its numbers. */
+  readonly weave: Weave | undefined;
   readonly allowances: Allowances | undefined;
   readonly edges: Edges | undefined;
   /** Every role, with its yarn where that is sound. */
@@ -32,6 +37,7 @@ export interface PieceParts {
 
 const FIXINGS = ['slipped', 'tied', 'lashed'] as const satisfies readonly Fixing[];
 const FINISH_WAYS = ['knotted', 'twisted', 'tucked', 'plain'] as const satisfies readonly FinishWay[];
+const MODES = ['straight-warp', 'balanced', 'given', 'measured'] as const satisfies readonly WeaveMode[];
 const MOST_BANDS = 200;
 const MOST_YARNS = 60;
 const ROLE = /^[a-z][a-z0-9-]{0,39}$/i;
@@ -46,6 +52,8 @@ const NAIL_PITCH: NumberRule = { name: 'From nail to nail', min: 1, max: 100, un
 const NTH_NAIL: NumberRule = { name: 'Every so-many-th nail', min: 1, max: 50, whole: true };
 const END_COUNT: NumberRule = { name: 'Number of ends', ...END_RANGE, whole: true };
 const SEED: NumberRule = { name: 'Seed of the drawing', min: 0, max: Number.MAX_SAFE_INTEGER, whole: true };
+/** Weft round a straight warp as close as it goes takes up 57 %. */
+const MOST_TAKE_UP = 0.6;
 const BEAT: NumberRule = { name: 'Picks in one weft thickness', ...BEAT_RANGE };
 const PICKS_PER_CM: NumberRule = { name: 'Picks in a centimetre', min: 'over-zero', max: 200 };
 
@@ -104,7 +112,33 @@ function readWarp(fields: Fields): Warp {
   return warp;
 }
 
-function readBeat(fields: Fields): Beat {
+const percent = (of: number): string => String(roundHalfUp(1000 * of) / 10);
+
+function readMeasured(fields: Fields): Weave {
+  const takeUp = fields.optionalNumber('takeUp', share('Take-up of the weft', MOST_TAKE_UP));
+  const warpTakeUp = fields.optionalNumber('warpTakeUp', share('Take-up of the warp', MOST_TAKE_UP));
+  if (takeUp === undefined) {
+    const { likely, low, high } = TAKE_UP_UNKNOWN;
+    fields.findings.warn('W_TAKE_UP', fields.pathOf('takeUp'), `No take-up is given, so ${percent(likely)} % is reckoned with; balanced cloth takes up between ${percent(low)} and ${percent(high)} %. Draw a pick out of a swatch, measure it straight, and give what it is longer than the swatch is wide.`);
+  }
+  return { mode: 'measured', ...present({ takeUp, warpTakeUp }) };
+}
+
+/** The numbers a mode has; those of another are left to be refused as unknown. */
+function readWeave(fields: Fields, mode: WeaveMode): Weave {
+  switch (mode) {
+    case 'given':
+      return { mode, weftWaveMm: fields.number('weftWaveMm', allowance('Height of the weft’s wave')) };
+    case 'measured':
+      return readMeasured(fields);
+    case 'straight-warp':
+    case 'balanced':
+      return { mode };
+  }
+}
+
+function readBeat(fields: Fields, mode: WeaveMode): RowBeat {
+  if (mode === 'balanced' && fields.take('beat') === undefined) return 'as-ends';
   const group = fields.group('beat', 'Beat');
   const swatch = group.has('picksPerCm');
   if (swatch && group.has('picksPerWeftDiameter')) {
@@ -223,12 +257,14 @@ function readBands(fields: Fields): readonly (Band | undefined)[] {
 export function readPieceParts(fields: Fields): PieceParts {
   const { findings } = fields;
   fields.take('craft');
+  const mode = fields.optionalChoice('mode', 'Mode', MODES) ?? 'straight-warp';
   const parts = {
     size: findings.soundly(() => readSize(fields)),
     loom: findings.soundly(() => readLoom(fields)),
     warp: findings.soundly(() => readWarp(fields)),
-    beat: findings.soundly(() => readBeat(fields)),
-    mode: fields.optionalChoice('mode', 'Mode', ['straight-warp', 'balanced']) ?? 'straight-warp',
+    beat: findings.soundly(() => readBeat(fields, mode)),
+    mode,
+    weave: findings.soundly(() => readWeave(fields, mode)),
     allowances: findings.soundly(() => readAllowances(fields)),
     edges: findings.soundly(() => readEdges(fields)),
     yarns: readYarns(fields),

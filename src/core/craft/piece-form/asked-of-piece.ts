@@ -1,5 +1,5 @@
 /** What is asked once for the whole piece, group by group as the form shows it. */
-import { DEFAULT_ALLOWANCES, FRINGE_BUNDLE_ENDS, NAIL_DIAMETER_MM, TIE_MM } from '#core/craft/defaults.ts';
+import { DEFAULT_ALLOWANCES, FRINGE_BUNDLE_ENDS, NAIL_DIAMETER_MM, TAKE_UP_UNKNOWN, TIE_MM } from '#core/craft/defaults.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import type { LoomKindName } from '#core/craft/piece.ts';
 import { option, type Asked, type Option } from './asked.ts';
@@ -61,6 +61,7 @@ export const BEAT_BY: Asked = {
     option('rug', 'Beaten like a rug'),
     option('own', 'By a number of my own'),
     option('swatch', 'As counted on a swatch'),
+    option('ends', 'As close as the ends, in balanced cloth'),
   ],
 };
 export const OWN_BEAT: Asked = {
@@ -74,8 +75,22 @@ export const SWATCH_BEAT: Asked = {
 
 export const MODE: Asked = {
   key: 'mode', kind: 'choice', label: 'The cloth is',
-  options: [option('straight-warp', 'Weft-faced: the warp runs straight'), option('balanced', 'Balanced: both bend alike')],
+  options: [option('straight-warp', 'Weft-faced: the warp runs straight'), option('balanced', 'Balanced: both bend alike'), option('given', 'Bent as high as I say'), option('measured', 'As I measured its take-up')],
 };
+export const WAVE: readonly Asked[] = [
+  { key: 'weftWaveMm', kind: 'fine', label: 'Wave of the weft', called: 'Height of the weft’s wave', needed: true, hint: 'From its lowest place to its highest, in the middle of the yarn.' },
+];
+export const TAKE_UP: readonly Asked[] = [
+  { key: 'takeUp', kind: 'share', label: 'Take-up of the weft', hint: 'What a pick drawn out straight is longer than the swatch is wide.', standard: () => TAKE_UP_UNKNOWN.likely },
+  { key: 'warpTakeUp', kind: 'share', label: 'Take-up of the warp', hint: 'The same of an end.', otherwise: 'none' },
+];
+/** Numbers of every mode that has some. */
+export const OF_MODE: readonly Asked[] = [...WAVE, ...TAKE_UP];
+/** What the chosen mode has of these. */
+export function askedOfMode(texts: Texts): readonly Asked[] {
+  const mode = textOf(texts, MODE.key);
+  return mode === 'given' ? WAVE : mode === 'measured' ? TAKE_UP : [];
+}
 
 export const HANGING: readonly Asked[] = [
   { key: 'dowel.diameterMm', kind: 'fine', label: 'Dowel', called: 'Thickness of the dowel', otherwise: 'no dowel' },
@@ -133,6 +148,6 @@ export const ALLOWANCES: readonly Asked[] = [
 
 /** All of them but the beat, which is two values of which one is given. */
 export const ASKED_ONCE: readonly Asked[] = [
-  ...SIZE, LOOM_KIND, ...LOOM, NAIL_ROWS, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...HANGING, FIXING, FINISH, ...FRINGE, HANGS, SEED, ...ALLOWANCES,
+  ...SIZE, LOOM_KIND, ...LOOM, NAIL_ROWS, WARPING, ENDS_TOGETHER, PARITY, ...WARP, MODE, ...OF_MODE, ...HANGING, FIXING, FINISH, ...FRINGE, HANGS, SEED, ...ALLOWANCES,
 ];
 export const BEAT_FIELDS: readonly Asked[] = [BEAT_BY, OWN_BEAT, SWATCH_BEAT];

@@ -4,7 +4,7 @@ import { texFromWraps } from '#core/craft/yarn/diameter.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 import { BAND_NAME, bandFields, FILL_KEY, SHAPE, shapeFields, TECHNIQUE } from './asked-of-band.ts';
-import { ASKED_ONCE, BEAT_BY, FIRMNESS, FIXING, FRINGE, fringeAsked, HANGING, hasTwoRows, NAIL_ROWS, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
+import { ASKED_ONCE, askedOfMode, BEAT_BY, FIRMNESS, FIXING, FRINGE, fringeAsked, HANGING, hasTwoRows, NAIL_ROWS, OF_MODE, OWN_BEAT, SWATCH_BEAT } from './asked-of-piece.ts';
 import { ASHENHURST, BALL, BY, gristAsked, ROLE, WRAPS, YARN_TRAITS } from './asked-of-yarn.ts';
 import { missingSays, readText, type ReadText } from './field-text.ts';
 import { textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } from './typed-piece.ts';
@@ -148,8 +148,10 @@ function readBand(reading: Reading, { texts, shapes }: TypedBand, prefix: string
   return band;
 }
 
-function readBeat(reading: Reading, texts: Texts): Group {
+/** Undefined for rows as close as the ends, which a piece says by having no beat. */
+function readBeat(reading: Reading, texts: Texts): Group | undefined {
   const by = reading.value(texts, BEAT_BY, '');
+  if (by === 'ends') return undefined;
   if (by === 'comb' || by === 'firm' || by === 'rug') return { picksPerWeftDiameter: FIRMNESS[by] };
   const asked = by === 'swatch' ? SWATCH_BEAT : OWN_BEAT;
   const picks = reading.value(texts, asked, '');
@@ -160,6 +162,7 @@ function readBeat(reading: Reading, texts: Texts): Group {
 function isAsked(asked: Asked, texts: Texts): boolean {
   if (asked === NAIL_ROWS) return hasTwoRows(texts);
   if (asked === FIXING) return textOf(texts, 'dowel.diameterMm').trim() !== '';
+  if (OF_MODE.includes(asked)) return askedOfMode(texts).includes(asked);
   return !FRINGE.includes(asked) || fringeAsked(texts).includes(asked);
 }
 
@@ -170,7 +173,8 @@ export function readTyped({ units, texts, warpYarn, yarns: rows, bands }: TypedP
   const askedOnce = ASKED_ONCE.filter((asked) => isAsked(asked, texts));
   reading.fill(piece, texts, [...askedOnce, ...together(texts, HANGING, 'dowel.diameterMm')], '');
   putAt(piece, 'warp.yarn', readYarn(reading, warpYarn, 'warp.yarn.', ASHENHURST_K.warp));
-  piece['beat'] = readBeat(reading, texts);
+  const beat = readBeat(reading, texts);
+  if (beat !== undefined) piece['beat'] = beat;
   const { yarns, roleOf } = readYarns(reading, rows);
   piece['yarns'] = yarns;
   piece['bands'] = bands.map((band, index) => readBand(reading, band, `bands.${String(index)}.`, roleOf));

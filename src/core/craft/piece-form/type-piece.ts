@@ -17,8 +17,9 @@ function textsOf(owner: unknown, asked: readonly Asked[], units: Units): Record<
   return Object.fromEntries(asked.map((one) => [one.key, fieldText(valueAt(owner, one.key), one, units)]));
 }
 
-function beatTexts(beat: Beat, units: Units): Texts {
+function beatTexts(beat: Beat | undefined, units: Units): Texts {
   const texts = textsOf({ beat }, BEAT_FIELDS, units);
+  if (beat === undefined) return { ...texts, 'beat.by': 'ends' };
   if (beat.picksPerCm !== undefined) return { ...texts, 'beat.by': 'swatch', [SWATCH_BEAT.key]: String(beat.picksPerCm) };
   const word = Object.entries(FIRMNESS).find(([, picks]) => picks === beat.picksPerWeftDiameter)?.[0];
   return word === undefined ? { ...texts, 'beat.by': 'own' } : { ...texts, 'beat.by': word, [OWN_BEAT.key]: '' };

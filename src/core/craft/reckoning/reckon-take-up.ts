@@ -1,9 +1,10 @@
 /** How much both yarns of a plain weave bend, and how long that makes them. */
 import { weftWaveRange, waveOf, type Wave, type WaveRange } from '#core/craft/crimp.ts';
+import { admitsWave } from '#core/craft/given-wave.ts';
 import { chooseWeftWave } from '#core/craft/picks.ts';
+import type { Weave } from '#core/craft/weave.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import { fineLength, PICK_SPACING, SPACING, WARP_DIAMETER } from '#core/craft/reckoning/rules.ts';
-import type { WeaveMode } from '#core/craft/piece.ts';
 import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
 import type { Problem } from '#core/outcome.ts';
 
@@ -24,21 +25,6 @@ interface Cloth {
   readonly p2: number;
 }
 
-/** The weft's wave as given: inside what its yarns allow. */
-function givenWave(heightMm: number, { D, p1, p2 }: Cloth, range: WaveRange, fields: Fields): number | undefined {
-  if (heightMm > D * (1 + 1e-12)) {
-    fields.reject('E_RANGE', 'weftWaveMm', `A wave is at most as high as both yarns together: up to ${fields.findings.length(D)} works.`);
-    return undefined;
-  }
-  const hair = 1e-9 * Math.max(D, p1, p2);
-  if (heightMm < range.min - hair || heightMm > range.max + hair) {
-    const allowed = `between ${fields.findings.length(range.min)} and ${fields.findings.length(range.max)}`;
-    fields.reject('E_JAM', 'weftWaveMm', `The yarns jam at that wave. ${allowed.charAt(0).toUpperCase()}${allowed.slice(1)} works.`);
-    return undefined;
-  }
-  return heightMm;
-}
-
 function readCloth(fields: Fields): Cloth {
   const d1 = fields.number('warpDiameterMm', WARP_DIAMETER);
   const d2 = fields.number('weftDiameterMm', fineLength('Thickness of the weft'));
@@ -52,19 +38,23 @@ function readCloth(fields: Fields): Cloth {
 }
 
 /** The wave as given, or as the mode chooses it; undefined where the yarns jam or the given one is refused. */
-function weftWave(given: number | undefined, cloth: Cloth, range: WaveRange, mode: WeaveMode, fields: Fields): number | undefined {
-  if (given !== undefined) return givenWave(given, cloth, range, fields);
-  const chosen = chooseWeftWave(range, cloth.D, mode);
+function weftWave(given: number | undefined, { D, p1, p2 }: Cloth, range: WaveRange, mode: TakeUpMode, fields: Fields): number | undefined {
+  const admitted = given === undefined || admitsWave(given, { diameterSumMm: D, warpSpacingMm: p1, weftSpacingMm: p2 }, fields.pathOf('weftWaveMm'), fields.findings);
+  if (!admitted) return undefined;
+  const chosen = chooseWeftWave(range, D, given === undefined ? { mode } : { mode: 'given', weftWaveMm: given });
   if (chosen?.clamped === true) {
     fields.findings.warn('W_CLAMPED', '/mode', 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
   }
   return chosen?.heightMm;
 }
 
+/** What decides the wave where it is not given. */
+type TakeUpMode = (Weave & { readonly mode: 'straight-warp' | 'balanced' })['mode'];
+
 export interface TakeUpQuestion {
   readonly cloth: Cloth;
   readonly weftWaveMm: number | undefined;
-  readonly mode: WeaveMode;
+  readonly mode: TakeUpMode;
 }
 
 export function readTakeUp(fields: Fields): TakeUpQuestion | undefined {

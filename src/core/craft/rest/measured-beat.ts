@@ -2,7 +2,7 @@
 import type { PieceOnLoom } from '#core/craft/frame-loom/add-up.ts';
 import type { StackedBand } from '#core/craft/frame-loom/stack-bands.ts';
 import type { Beat } from '#core/craft/piece.ts';
-import { BEAT_RANGE, picksInHeight } from '#core/craft/picks.ts';
+import { BEAT_RANGE, picksInHeight, type RowBeat } from '#core/craft/picks.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 import { pickSpacingOn } from '#core/craft/techniques/technique.ts';
 import type { WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
@@ -34,7 +34,8 @@ export function plannedSoFar(workings: PieceOnLoom, { bandsDone, rows = 0 }: Wov
   return { tabbyMm: parts.reduce((sum, part) => sum + part.tabbyMm, 0), otherMm: parts.reduce((sum, part) => sum + part.otherMm, 0) };
 }
 
-function quicker(beat: Beat, times: number): Beat {
+function quicker(beat: RowBeat, times: number, endSpacingMm: number): Beat {
+  if (beat === 'as-ends') return { picksPerCm: (10 / endSpacingMm) * times };
   return beat.picksPerCm === undefined ? { picksPerWeftDiameter: beat.picksPerWeftDiameter * times } : { picksPerCm: beat.picksPerCm * times };
 }
 
@@ -47,7 +48,7 @@ export function measuredBeat(workings: PieceOnLoom, woven: WovenSoFar, findings:
   const { tabbyMm, otherMm } = plannedSoFar(workings, woven);
   if (tabbyMm < LEAST_MEASURED_MM) return undefined;
   const measuredMm = woven.heightMm * shrinkOf(workings) - otherMm;
-  const beat = measuredMm > 0 ? quicker(workings.laid.beat, tabbyMm / measuredMm) : undefined;
+  const beat = measuredMm > 0 ? quicker(workings.laid.beat, tabbyMm / measuredMm, workings.laid.spacingMm) : undefined;
   const picks = beat?.picksPerCm ?? beat?.picksPerWeftDiameter;
   const most = beat?.picksPerCm === undefined ? BEAT_RANGE.max : 200;
   const least = beat?.picksPerCm === undefined ? BEAT_RANGE.min : 0;

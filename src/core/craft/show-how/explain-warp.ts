@@ -1,19 +1,20 @@
 /** Dressing the loom: ends, nails, height, and the warp yarn they take. */
-import { ASHENHURST_K, DEFAULT_ALLOWANCES, HANGING, RAIL_MARGIN_MM, TIE_MM } from '#core/craft/defaults.ts';
+import { ASHENHURST_K, DEFAULT_ALLOWANCES, HANGING, RAIL_MARGIN_MM, TOP_FOR_TYING_MM } from '#core/craft/defaults.ts';
 import { endsPerMm } from '#core/craft/nails.ts';
 import { endsFor } from '#core/craft/ends.ts';
 import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import type { Loom } from '#core/craft/piece.ts';
 import { layoutOf } from '#core/craft/frame-loom/room.ts';
-import { finishRoom } from '#core/craft/frame-loom/room.ts';
+import { warpRun } from '#core/craft/frame-loom/count-yarn.ts';
 import { topForDowel, topForHanging } from '#core/craft/loom-height.ts';
 import { roundHalfUp } from '#core/craft/rounding.ts';
+import { noteLowerEnds } from '#core/craft/show-how/explain-lower-ends.ts';
 import { noteThread, type ThreadWorkings } from '#core/craft/show-how/explain-thread.ts';
-import { from, given, standing, sumOf, WEIGHS_NOTHING } from '#core/craft/show-how/notebook.ts';
+import { from, given, standing, sumOf, WEIGHS_NOTHING, type Notebook } from '#core/craft/show-how/notebook.ts';
 import { givenOr, setting, type OnLoom } from '#core/craft/show-how/on-loom.ts';
 import { DEFAULTS, RULES } from '#core/craft/show-how/sources.ts';
 import type { Working, WorkingInput } from '#core/craft/show-how/working.ts';
-import { warpLength, warpRoundNails, warpStraight } from '#core/craft/warp.ts';
+import { warpLength, warpRoundNails, warpStraight, warpTakenUp } from '#core/craft/warp.ts';
 
 export interface WarpWorkings {
   readonly thread: ThreadWorkings;
@@ -24,8 +25,14 @@ export interface WarpWorkings {
   readonly spacing: Working;
   readonly woundWidth: Working;
   readonly bottom: Working;
+  /** Height of the cloth on the loom. */
+  readonly height: Working;
+  /** Warp yarn without margin. */
   readonly net: Working;
 }
+
+/** Before it is known what the warp bends in the cloth. */
+export type BareWarp = Omit<WarpWorkings, 'net'>;
 
 /** Ends as others go on from them: once they are wound, they are what they are. */
 export const asWound = (symbol: string, ends: Working): WorkingInput => from(symbol, ends, WEIGHS_NOTHING);
@@ -108,9 +115,16 @@ function noteNails({ book, piece }: OnLoom, count: Working, { pitch, perMm }: Na
   });
 }
 
-/** Answers the working of the unwoven warp at the bottom. */
-function noteHeight(of: OnLoom): Working {
-  const { book, piece: { size, loom, warp, edges: { dowel, finish }, height } } = of;
+/** Loops that are tied to the dowel need a length of their own, and no less than going round it takes. */
+function noteTying(book: Notebook, round: Working, value: number): Working {
+  const tying = standing({ symbol: 'l', name: 'warp to tie to the dowel', value: TOP_FOR_TYING_MM, unit: 'mm' }, DEFAULTS.topForTying, WEIGHS_NOTHING);
+  return book.note({ id: 'loom.topForTyingMm', name: 'unwoven warp for loops that are tied', formula: 'max(l, r)', inputs: [tying, from('r', round)], value, unit: 'mm', ...RULES.loom });
+}
+
+/** Answers the workings of the height on the loom and of the unwoven warp at the bottom. */
+function noteHeight(of: OnLoom, thread: ThreadWorkings): Pick<WarpWorkings, 'bottom' | 'height'> {
+  const { book, piece } = of;
+  const { size, loom, edges: { dowel, finish }, height } = piece;
   const finished = given({ symbol: 'H', name: 'height of the cloth', value: size.heightMm, unit: 'mm' }, '/size/heightMm', 'counted');
   const onLoom = book.note({
     id: 'loom.heightOnLoomMm', name: 'height of the cloth on the loom', formula: 'H / ((1 - lambda) * (1 - sigma))',
@@ -118,21 +132,20 @@ function noteHeight(of: OnLoom): Working {
   });
   const least = standing({ symbol: 'c', name: 'room for the last shed', value: loomKind(loom).leastBareMm.top, unit: 'mm' }, DEFAULTS.topMm, WEIGHS_NOTHING);
   const top = [setting(of, 'a', 'topMm', WEIGHS_NOTHING), least];
-  if (dowel !== undefined && dowel.fixing === 'tied') {
-    top.push(standing({ symbol: 't', name: 'warp to tie to the dowel', value: topForHanging(dowel), unit: 'mm' }, DEFAULTS.topMm, WEIGHS_NOTHING));
-  } else if (dowel !== undefined && dowel.fixing !== 'lashed') {
+  if (dowel !== undefined && dowel.fixing !== 'lashed') {
     const thick = given({ symbol: 'd', name: 'thickness of the dowel', value: dowel.diameterMm, unit: 'mm' }, '/dowel/diameterMm', 'measured');
     const seat = standing({ symbol: 's', name: 'seat of the loops', value: HANGING.seatMm, unit: 'mm' }, DEFAULTS.seat, WEIGHS_NOTHING);
-    top.push(from('t', book.note({
+    const round = book.note({
       id: 'loom.topForDowelMm', name: 'unwoven warp the dowel takes', formula: 'pi / 2 * d + s', inputs: [thick, seat], value: topForDowel(dowel.diameterMm), unit: 'mm', ...RULES.euclid,
-    })));
+    });
+    top.push(from('t', dowel.fixing === 'tied' ? noteTying(book, round, topForHanging(dowel)) : round));
   }
   const topUsed = book.note({
     id: 'loom.topMm', name: 'unwoven warp at the top', formula: `max(${top.map(({ symbol }) => symbol).join(', ')})`, inputs: top, value: height.topMm, unit: 'mm', ...RULES.loom,
   });
   const knots = standing({ symbol: 'c', name: 'enough to knot or tuck the ends', value: loomKind(loom).leastBareMm.bottom, unit: 'mm' }, DEFAULTS.bottomMm, WEIGHS_NOTHING);
   const asked = [setting(of, 'a', 'bottomMm', WEIGHS_NOTHING), knots];
-  if (finish !== undefined) asked.push(standing({ symbol: 'f', name: 'warp the finish takes', value: finishRoom(warp, finish), unit: 'mm' }, DEFAULTS.bottomMm, WEIGHS_NOTHING));
+  if (finish !== undefined) asked.push(from('f', noteLowerEnds(book, finish, thread, piece.dressed.thread.loftMm), WEIGHS_NOTHING));
   const bottom = book.note({
     id: 'loom.bottomMm', name: 'unwoven warp at the bottom', formula: `max(${asked.map(({ symbol }) => symbol).join(', ')})`, inputs: asked, value: height.bottomMm, unit: 'mm', ...RULES.loom,
   });
@@ -140,7 +153,7 @@ function noteHeight(of: OnLoom): Working {
   book.note({ id: 'loom.heightNeededMm', name: 'from nail to nail upright, at least', formula: sumOf(parts), inputs: parts, value: height.heightNeededMm, unit: 'mm', ...RULES.arithmetic });
   const frame = given({ symbol: 'H', name: 'from nail to nail upright', value: loom.insideHeightMm, unit: 'mm' }, '/loom/insideHeightMm', 'measured');
   book.note({ id: 'loom.insideHeightMm', name: 'from nail to nail upright', formula: 'H', inputs: [frame], value: loom.insideHeightMm, unit: 'mm', ...RULES.asGiven });
-  return bottom;
+  return { bottom, height: onLoom };
 }
 
 /** How far apart bare ends stand where the first row comes to lie, and the rows that set them even. */
@@ -162,12 +175,10 @@ function noteGaps({ book, piece: { loom, height } }: OnLoom, bottom: Working, pi
   }
 }
 
-/** Warp yarn without margin. */
-function noteWarpYarn({ book, piece }: OnLoom, thread: ThreadWorkings, count: Working): Working {
+/** Warp yarn without margin; `crimp` is what its ends bend in the cloth, missing where they are straight. */
+export function noteWarpYarn({ book, piece }: OnLoom, { thread, count, height }: BareWarp, crimp: Working | undefined): Working {
   const { loom, warp, dressed } = piece;
-  const run = {
-    ends: dressed.ends.count, frameHeightMm: loom.insideHeightMm, nailDiameterMm: dressed.nailDiameterMm, warpDiameterMm: dressed.thread.compressedMm, tieMm: warp.tieMm ?? TIE_MM,
-  };
+  const run = warpRun(warp, loom, dressed, height.value, crimp?.value ?? 0);
   const E = asWound('E', count);
   const frame = given({ symbol: 'H', name: 'from nail to nail upright', value: loom.insideHeightMm, unit: 'mm' }, '/loom/insideHeightMm', 'measured');
   const straight = book.note({ id: 'warp.straightMm', name: 'warp straight along the frame', formula: 'E * H', inputs: [E, frame], value: warpStraight(run), unit: 'mm', ...RULES.nails });
@@ -178,7 +189,10 @@ function noteWarpYarn({ book, piece }: OnLoom, thread: ThreadWorkings, count: Wo
   });
   const tie = givenOr({ symbol: 't', name: 'one tie', value: run.tieMm, unit: 'mm' }, '/warp/tieMm', warp.tieMm !== undefined, DEFAULTS.tie, WEIGHS_NOTHING);
   const ties = book.note({ id: 'warp.tiesMm', name: 'warp for both ties', formula: '2 * t', inputs: [tie], value: 2 * run.tieMm, unit: 'mm', ...RULES.arithmetic });
-  const parts = [from('l', straight), from('r', round), from('t', ties)];
+  const bent = crimp && book.note({
+    id: 'warp.takenUpMm', name: 'warp its bends take', formula: 'E * H * c', inputs: [E, from('H', height), from('c', crimp)], value: warpTakenUp(run), unit: 'mm', ...RULES.peirce,
+  });
+  const parts = [from('l', straight), ...(bent === undefined ? [] : [from('b', bent)]), from('r', round), from('t', ties)];
   const all = book.note({ id: 'warp.threadMm', name: 'warp as it lies', formula: sumOf(parts), inputs: parts, value: warpLength(run), unit: 'mm', ...RULES.arithmetic });
   return book.note({
     id: 'warp.netMm', name: 'warp yarn, without margin', formula: 'l * m', inputs: [from('l', all), thread.strands], value: all.value * dressed.thread.strands, unit: 'mm', ...RULES.arithmetic,
@@ -186,8 +200,8 @@ function noteWarpYarn({ book, piece }: OnLoom, thread: ThreadWorkings, count: Wo
   });
 }
 
-/** Everything up to the dressed loom, and what yarn that takes. */
-export function noteWarp(of: OnLoom): WarpWorkings {
+/** Everything up to the dressed loom. */
+export function noteWarp(of: OnLoom): BareWarp {
   const { book, piece } = of;
   const { size, dressed } = piece;
   const nailing = noteSpacing(of);
@@ -204,12 +218,12 @@ export function noteWarp(of: OnLoom): WarpWorkings {
     id: 'ends.working', name: 'ends the weft treats as one', formula: 'E / k', inputs: [asWound('E', count), nailing.together], value: dressed.ends.working, unit: 'count', ...RULES.count,
   });
   const woundWidth = noteNails(of, count, nailing);
-  const bottom = noteHeight(of);
-  noteGaps(of, bottom, nailing.pitch);
   const thread = noteThread(book, { prefix: 'warp.', path: '/warp/yarn', yarn: piece.warp.yarn, defaultK: ASHENHURST_K.warp });
+  const { bottom, height } = noteHeight(of, thread);
+  noteGaps(of, bottom, nailing.pitch);
   const workingDiameter = book.note({
     id: 'warp.workingDiameterMm', name: 'thickness of a working end, under tension', formula: 'sqrt(k) * d', inputs: [nailing.together, from('d', thread.compressed)],
     value: dressed.workingDiameterMm, unit: 'mm', ...RULES.together,
   });
-  return { thread, workingDiameter, count, working, spacing: nailing.spacing, woundWidth, bottom, net: noteWarpYarn(of, thread, count) };
+  return { thread, workingDiameter, count, working, spacing: nailing.spacing, woundWidth, bottom, height };
 }

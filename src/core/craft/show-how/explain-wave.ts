@@ -45,8 +45,8 @@ export interface BentYarn {
   readonly crimp: number;
 }
 
-/** Straight part, angle, length and crimp; answers the working of the length. */
-export function noteBend(book: Notebook, yarn: BentYarn): Working {
+/** Straight part, angle, length and crimp; answers the workings of the latter two. */
+export function noteBend(book: Notebook, yarn: BentYarn): { readonly length: Working; readonly crimp: Working } {
   const { prefix, of } = yarn;
   const [p, D, h] = [as('p', yarn.spacing), yarn.D, as('h', yarn.wave)];
   const straightMm = straightPart(Number(yarn.spacing.value), Number(yarn.D.value), Number(yarn.wave.value)) ?? 0;
@@ -62,9 +62,9 @@ export function noteBend(book: Notebook, yarn: BentYarn): Working {
     id: `${prefix}${yarn.lengthId}`, name: `${of} from one crossing to the next`, formula: 'L + D * theta', inputs: [from('L', straight), D, from('theta', angle)],
     value: yarn.lengthMm, unit: 'mm', ...RULES.peirce,
   });
-  book.note({
+  const crimp = book.note({
     id: `${prefix}crimp`, name: `take-up of the ${of}`, formula: 'l / p - 1', inputs: [from('l', length), p],
     value: yarn.crimp, unit: 'share', ...RULES.peirce,
   });
-  return length;
+  return { length, crimp };
 }

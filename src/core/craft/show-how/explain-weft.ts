@@ -1,11 +1,10 @@
 /** Picks of every weft yarn between these ends: how close rows lie, and what one pick takes. */
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
-import { weftWaveRange } from '#core/craft/crimp.ts';
 import { pickLength } from '#core/craft/picks.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import { noteThread, type ThreadWorkings } from '#core/craft/show-how/explain-thread.ts';
-import { asWound, type WarpWorkings } from '#core/craft/show-how/explain-warp.ts';
-import { noteBend, noteWaveRange } from '#core/craft/show-how/explain-wave.ts';
+import { asWound, type BareWarp } from '#core/craft/show-how/explain-warp.ts';
+import { noteBending } from '#core/craft/show-how/explain-bend.ts';
 import { from, given, standing } from '#core/craft/show-how/notebook.ts';
 import type { OnLoom } from '#core/craft/show-how/on-loom.ts';
 import { RULES } from '#core/craft/show-how/sources.ts';
@@ -25,6 +24,8 @@ export interface PickWorkings {
   /** Between the ends the weft meets. */
   readonly endSpacing: Working;
   readonly ends: Working;
+  /** What the warp bends between such picks; missing where it is straight. */
+  readonly warpCrimp?: Working;
 }
 
 /** What the bands go on from. */
@@ -45,12 +46,21 @@ export function ofRole<T>(workings: ReadonlyMap<string, T>, role: string): T {
   return found;
 }
 
-function noteSpacing({ book, piece }: OnLoom, prefix: string, weftDiameter: Working, value: number): Working {
+interface Spaced {
+  readonly weftDiameter: Working;
+  readonly usual: Working;
+  readonly endSpacing: Working;
+}
+
+/** `usual` is the thickness a swatch was counted with. */
+function noteSpacing({ book, piece }: OnLoom, prefix: string, { weftDiameter, usual, endSpacing }: Spaced, value: number): Working {
   const { beat } = piece.laid;
   const what = { id: `${prefix}pickSpacingMm`, name: 'from row to row', value, unit: 'mm' } as const;
+  if (beat === 'as-ends') return book.note({ ...what, formula: 'p', inputs: [from('p', endSpacing)], ...RULES.rowsAsEnds });
   if (beat.picksPerCm !== undefined) {
     const counted = given({ symbol: 'n', name: 'rows in a centimetre', value: beat.picksPerCm, unit: 'per-cm' }, '/beat/picksPerCm', 'measured');
-    return book.note({ ...what, formula: '10 / n', inputs: [counted], ...RULES.swatch });
+    if (weftDiameter === usual) return book.note({ ...what, formula: '10 / n', inputs: [counted], ...RULES.swatch });
+    return book.note({ ...what, formula: '10 / n * d / u', inputs: [counted, from('d', weftDiameter), from('u', usual)], ...RULES.swatchStrands });
   }
   const beta = given({ symbol: 'beta', name: 'rows in one thickness of the weft', value: beat.picksPerWeftDiameter, unit: 'ratio' }, '/beat/picksPerWeftDiameter', 'practice');
   return book.note({ ...what, formula: 'd2 / beta', inputs: [from('d2', weftDiameter), beta], ...RULES.beat });
@@ -59,7 +69,7 @@ function noteSpacing({ book, piece }: OnLoom, prefix: string, weftDiameter: Work
 type Met = Pick<PickWorkings, 'weftDiameter' | 'strands' | 'endSpacing' | 'ends'> & { readonly warpDiameter: Working };
 
 /** The weft with as many strands as the band takes, and the ends it meets: two as one in basket weave. */
-function noteMeeting({ book, piece }: OnLoom, prefix: string, laid: LaidPicks, warp: WarpWorkings, thread: ThreadWorkings): Met {
+function noteMeeting({ book, piece }: OnLoom, prefix: string, laid: LaidPicks, warp: BareWarp, thread: ThreadWorkings): Met {
   const { strands, pairs } = laid.pick;
   const own = strands === undefined ? thread.strands : standing({ symbol: 'm', name: 'strands in a row', value: strands, unit: 'count' }, RULES.bandStrands);
   const weftDiameter = strands === undefined ? thread.compressed : book.note({
@@ -75,38 +85,17 @@ function noteMeeting({ book, piece }: OnLoom, prefix: string, laid: LaidPicks, w
   };
 }
 
-interface Laid {
-  readonly prefix: string;
-  readonly geometry: LaidPicks;
-  readonly spacing: Working;
-  readonly endSpacing: Working;
-  readonly D: WorkingInput;
-}
-
-function noteWave({ book, piece }: OnLoom, { prefix, geometry, spacing, endSpacing, D }: Laid): Working {
-  const what = { id: `${prefix}waveMm`, name: 'wave of the weft', value: geometry.waveMm, unit: 'mm' } as const;
-  if (piece.parts.mode === 'straight-warp') return book.note({ ...what, formula: 'D', inputs: [D], ...RULES.peirce });
-  const range = weftWaveRange(geometry.diameterSumMm, endSpacing.value, geometry.pickSpacingMm);
-  if (range === undefined) throw new Error('picks that jam were laid');
-  const ids = { min: `${prefix}leastWaveMm`, max: `${prefix}mostWaveMm` };
-  const { min, max } = noteWaveRange(book, ids, { D, p1: from('p1', endSpacing), p2: from('p2', spacing) }, range);
-  return book.note({ ...what, formula: 'min(b, max(a, D / 2))', inputs: [from('a', min), from('b', max), D], ...RULES.peirce });
-}
-
-function notePicks(of: OnLoom, prefix: string, geometry: LaidPicks, warp: WarpWorkings, thread: ThreadWorkings): PickWorkings {
+function notePicks(of: OnLoom, prefix: string, geometry: LaidPicks, warp: BareWarp, thread: ThreadWorkings): PickWorkings {
   const { book } = of;
   const { warpDiameter, ...met } = noteMeeting(of, prefix, geometry, warp, thread);
-  const spacing = noteSpacing(of, prefix, met.weftDiameter, geometry.pickSpacingMm);
+  const spacing = noteSpacing(of, prefix, { ...met, usual: thread.compressed }, geometry.pickSpacingMm);
   const sum = book.note({
     id: `${prefix}diameterSumMm`, name: 'warp and weft together', formula: 'd1 + d2', inputs: [from('d1', warpDiameter), from('d2', met.weftDiameter)],
     value: geometry.diameterSumMm, unit: 'mm', ...RULES.arithmetic,
   });
   const [D, p] = [from('D', sum), from('p', met.endSpacing)];
   book.note({ id: `${prefix}tightness`, name: 'share of the room between two ends that warp and weft fill', formula: 'D / p', inputs: [D, p], value: geometry.tightness, unit: 'ratio', ...RULES.loom });
-  const wave = noteWave(of, { prefix, geometry, spacing, endSpacing: met.endSpacing, D });
-  const step = noteBend(book, {
-    prefix, of: 'weft', lengthId: 'stepMm', spacing: p, D, wave: from('h', wave), lengthMm: geometry.stepMm, angleRad: geometry.angleRad, crimp: geometry.crimp,
-  });
+  const { step, ...bent } = noteBending(of, { prefix, geometry, spacing, endSpacing: met.endSpacing, D });
   const turn = book.note({
     id: `${prefix}turnMm`, name: 'weft round the end at a selvedge', formula: 'hypot(pi * D / 2, p2)', inputs: [D, from('p2', spacing)], value: geometry.turnMm, unit: 'mm', ...RULES.turn,
   });
@@ -114,11 +103,11 @@ function notePicks(of: OnLoom, prefix: string, geometry: LaidPicks, warp: WarpWo
     id: `${prefix}pickMm`, name: 'weft of one pick, its turn included', formula: '(E - 1) * l + t', inputs: [asWound('E', met.ends), from('l', step), from('t', turn)],
     value: pickLength(geometry.workingEnds, geometry), unit: 'mm', ...RULES.peirce,
   });
-  return { ...met, spacing, step, turn, pick };
+  return { ...met, spacing, step, turn, pick, ...bent };
 }
 
 /** Both diameters of every yarn, and one pick of each way picks are woven in. */
-export function noteWeft(of: OnLoom, main: string, warp: WarpWorkings): WeftWorkings {
+export function noteWeft(of: OnLoom, main: string, warp: BareWarp): WeftWorkings {
   const { book, piece } = of;
   const threads = new Map<string, ThreadWorkings>();
   for (const [role, yarn] of piece.yarns) {
@@ -132,7 +121,7 @@ export function noteWeft(of: OnLoom, main: string, warp: WarpWorkings): WeftWork
   }
   const spacings = new Map<string, Working>();
   for (const [role, thread] of threads) {
-    spacings.set(role, picks.get(role)?.spacing ?? noteSpacing(of, `yarns.${role}.`, thread.compressed, pickSpacingOn(piece.laid, role)));
+    spacings.set(role, picks.get(role)?.spacing ?? noteSpacing(of, `yarns.${role}.`, { weftDiameter: thread.compressed, usual: thread.compressed, endSpacing: warp.spacing }, pickSpacingOn(piece.laid, role)));
   }
   return { threads, picks, spacings, main };
 }

@@ -81,7 +81,8 @@ function noteMargin(on: DressedWorkings, role: string, uses: readonly PlacedUse[
     const cut = standing({ symbol: 'M', name: 'margin of strands that are cut', value: CUT_STRANDS_MARGIN, unit: 'share' }, DEFAULTS.ryaMargin);
     return on.book.note({ id: `yarns.${role}.likelyMargin`, name: 'margin that suffices in 95 of 100 pieces', formula: 'M', inputs: [cut], value: CUT_STRANDS_MARGIN, unit: 'share', ...RULES.margins }).value;
   }
-  const swatch = on.piece.laid.beat.picksPerCm !== undefined;
+  const { beat } = on.piece.laid;
+  const swatch = beat !== 'as-ends' && beat.picksPerCm !== undefined;
   const parts: Uncertainties = ![...on.piece.laid.picks.values()].some(({ pick }) => pick.role === role) ? UNCERTAINTIES.rowsGiven : swatch ? UNCERTAINTIES.swatch : UNCERTAINTIES.unmeasured;
   const names = { width: 'width', height: 'height', picks: swatch ? 'rows, counted on a swatch' : 'rows, by the rule', crimp: 'take-up', tex: 'the yarn’s weight' };
   const inputs = (Object.keys(PARTS) as (keyof Uncertainties)[]).map((part) => standing({ symbol: `u${PARTS[part]}`, name: `what ${names[part]} may differ by`, value: parts[part], unit: 'share' }, DEFAULTS.uncertainty));

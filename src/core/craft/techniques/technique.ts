@@ -3,8 +3,8 @@
  * comes out, what can be wrong with it on this loom, and what it takes. One technique
  * is one file beside this one, and one line in `registry.ts`.
  */
-import type { BandByTechnique, Beat, TechniqueName } from '#core/craft/piece.ts';
-import { pickSpacing, type PickGeometry } from '#core/craft/picks.ts';
+import type { BandByTechnique, TechniqueName } from '#core/craft/piece.ts';
+import { spacingOfRows, type PickGeometry, type RowBeat } from '#core/craft/picks.ts';
 import type { Fields } from '#core/craft/reading/fields.ts';
 import type { ErrorCode, WarningCode } from '#core/craft/reading/findings.ts';
 import type { Work } from '#core/craft/time.ts';
@@ -19,7 +19,7 @@ export interface DressedLoom {
   readonly warpDiameterMm: number;
   /** Finished width of the cloth. */
   readonly widthMm: number;
-  readonly beat: Beat;
+  readonly beat: RowBeat;
   readonly tailMm: number;
   /** By yarn role. */
   readonly threads: ReadonlyMap<string, Thread>;
@@ -155,7 +155,7 @@ export function picksOn(loom: DressedLoom, pick: PickOf): LaidPicks {
 }
 
 export function pickSpacingOn(loom: DressedLoom, role: string): number {
-  return pickSpacing(loom.beat, threadOn(loom, role).compressedMm);
+  return spacingOfRows(loom.beat, threadOn(loom, role).compressedMm, loom.spacingMm);
 }
 
 /** D with the yarn lying free: warp and loft of the weft. */

@@ -39,6 +39,7 @@ const PROVOKED: Readonly<Record<Code, () => readonly Problem[]>> = {
   W_PARITY: () => plan({}),
   W_WIDTH: () => plan({ warp: { ...WARP, endCount: 40 } }),
   W_CLAMPED: () => told(reckon({ what: 'take-up', warpDiameterMm: 0.9, weftDiameterMm: 1.5, warpSpacingMm: 4.2, weftSpacingMm: 1.2, mode: 'balanced' })),
+  W_TAKE_UP: () => plan({ mode: 'measured' }),
   W_WARP_SHOWS: () => ground({ metresPer100g: 100, wrapsPerInch: 5 }),
   W_THICK: () => ground({ metresPer100g: 100, wrapsPerInch: 7.5 }),
   W_LOOSE: () => ground({ tex: 60 }),

@@ -89,15 +89,21 @@ const once = fc.record({
     yarn,
     more: fc.record({ endsTogether: perhaps(fc.constantFrom(1, 2)), parity: perhaps(fc.constantFrom('any', 'even', 'odd')), endCount: perhaps(count), tieMm: perhaps(mm) }),
   }).map(({ more, ...warp }) => ({ ...warp, ...present(more) })),
-  beat,
 });
+/** How the cloth bends, with what each way asks; rows of a balanced one may lie like its ends. */
+const weave = fc.oneof(
+  fc.tuple(perhaps(fc.constantFrom('straight-warp', 'balanced')), beat).map(([mode, own]) => ({ ...present({ mode }), beat: own })),
+  fc.constant({ mode: 'balanced' } as const),
+  fc.tuple(mm, beat).map(([weftWaveMm, own]) => ({ mode: 'given' as const, weftWaveMm, beat: own })),
+  fc.tuple(perhaps(share), perhaps(share), beat).map(([takeUp, warpTakeUp, own]) => ({ mode: 'measured' as const, ...present({ takeUp, warpTakeUp }), beat: own })),
+);
 const finish: fc.Arbitrary<Finish> = fc.oneof(
   fc.constant({ bottom: 'tucked' } as const),
   perhaps(mm).map((fringeMm) => ({ bottom: 'plain', ...present({ fringeMm }) } as const)),
   fc.tuple(fc.constantFrom('knotted', 'twisted'), perhaps(mm), perhaps(count)).map(([bottom, fringeMm, bundleEnds]) => ({ bottom, ...present({ fringeMm, bundleEnds }) })),
 );
 const more = fc.record({
-  mode: perhaps(fc.constantFrom('straight-warp', 'balanced')), allowances,
+  allowances,
   dowel: perhaps(fc.record({ diameterMm: mm, lengthMm: perhaps(mm), fixing: perhaps(fc.constantFrom('slipped', 'tied', 'lashed')) }).map(({ diameterMm, ...rest }) => ({ diameterMm, ...present(rest) }))),
   finish: perhaps(finish),
   hangs: perhaps(fc.constantFrom('as-woven', 'turned')), seed: perhaps(fc.nat()),
@@ -105,8 +111,8 @@ const more = fc.record({
 
 /** Optional parts come and go; empty groups and lists, which say nothing, do not occur. */
 export const arbitraryPiece: fc.Arbitrary<FrameLoomPiece> = fc.uniqueArray(roleName, { minLength: 1, maxLength: 4 }).chain((roles) =>
-  fc.tuple(once, more, fc.tuple(...roles.map(() => yarn)), fc.array(bandOf(fc.constantFrom(...roles)), { minLength: 1, maxLength: 6 }))
-    .map(([needed, optional, yarns, bands]): FrameLoomPiece => ({
-      craft: 'frame-loom', ...needed, ...present(optional), bands,
+  fc.tuple(once, weave, more, fc.tuple(...roles.map(() => yarn)), fc.array(bandOf(fc.constantFrom(...roles)), { minLength: 1, maxLength: 6 }))
+    .map(([needed, bent, optional, yarns, bands]): FrameLoomPiece => ({
+      craft: 'frame-loom', ...needed, ...bent, ...present(optional), bands,
       yarns: Object.fromEntries(roles.flatMap((role, index) => { const own = yarns[index]; return own === undefined ? [] : [[role, own]]; })),
     })));
