@@ -5,7 +5,10 @@ import { Media, SeriesMedia } from '#server/models/index.ts';
 export async function publishMedia(seriesId: number): Promise<void> {
   for (const named of await SeriesMedia.findAll({ where: { seriesId, draftMediaId: { [Op.ne]: null } } })) {
     const draft = named.draftMediaId === null ? null : await Media.findByPk(named.draftMediaId);
-    if (draft?.state === 'ready') await named.update({ mediaId: draft.id, draftMediaId: null });
+    if (draft?.state !== 'ready') continue;
+    // From now on it counts how long nothing has shown the one it replaces.
+    if (named.mediaId !== null) await Media.update({ progressPermille: 1_000 }, { where: { id: named.mediaId } });
+    await named.update({ mediaId: draft.id, draftMediaId: null });
   }
   const shown = await SeriesMedia.findAll({ where: { seriesId, mediaId: { [Op.ne]: null } } });
   for (const media of await Media.findAll({ where: { id: shown.map(({ mediaId }) => mediaId ?? 0), draftDetail: { [Op.ne]: null } } })) {

@@ -3,18 +3,21 @@ import { join } from 'node:path';
 import { Op } from 'sequelize';
 import { VIDEO_LIMITS } from '#core/video/limits.ts';
 import type { Context } from '#server/context.ts';
-import { VIDEO_UPLOADS_FOLDER } from '#server/media/video/folders.ts';
-import { Media, VideoUpload } from '#server/models/index.ts';
+import { VIDEO_UPLOADS_FOLDER, VIDEO_WORK_FOLDER } from '#server/media/video/folders.ts';
+import type { MediaStore } from '#server/media/store.ts';
+import { Media, SeriesMedia, VideoUpload } from '#server/models/index.ts';
 import { forgetUpload } from './_forget-upload.ts';
 import { sendToWorker } from './_send-to-worker.ts';
 
 const HOUR_MS = 3_600_000;
 /** Bytes without a row, and rows without bytes, are left alone this long: one may be on the way to the other. */
 const ORPHAN_MS = 48 * HOUR_MS;
+/** A film that nothing shows any more can be brought back this long. */
+const UNUSED_MS = 30 * 24 * HOUR_MS;
 
 /**
- * Sends on what came whole while its server died, forgets what was not finished in time, and sweeps away files of
- * uploads that no row speaks of.
+ * Sends on what came whole while its server died, forgets what was not finished in time, and sweeps away what no row
+ * speaks of, what workers that died left behind, and films that were replaced long ago.
  */
 export async function lookAfterUploads({ clock, services }: Context): Promise<void> {
   const now = clock.now().getTime();
@@ -31,16 +34,26 @@ export async function lookAfterUploads({ clock, services }: Context): Promise<vo
       await forgetUpload(publicId);
     }
   }
-  await sweep(folder, now);
+  const known = await Media.findAll({ where: { publicId: await readdir(folder), state: { [Op.notIn]: ['ready', 'failed'] } }, attributes: ['publicId'] });
+  await sweep(folder, new Set(known.map(({ publicId }) => publicId)), now);
+  await sweep(await services.media.temporaryFolder(VIDEO_WORK_FOLDER), new Set(), now);
+  await removeUnused(services.media, new Date(now - UNUSED_MS));
 }
 
-async function sweep(folder: string, now: number): Promise<void> {
-  const names = await readdir(folder);
-  const known = await Media.findAll({ where: { publicId: names, state: { [Op.notIn]: ['ready', 'failed'] } }, attributes: ['publicId'] });
-  const wanted = new Set(known.map(({ publicId }) => publicId));
-  for (const name of names.filter((one) => !wanted.has(one))) {
+async function sweep(folder: string, wanted: ReadonlySet<string>, now: number): Promise<void> {
+  for (const name of (await readdir(folder)).filter((one) => !wanted.has(one))) {
     const path = join(folder, name);
     const old = await stat(path).then(({ mtimeMs }) => mtimeMs < now - ORPHAN_MS, () => false);
     if (old) await rm(path, { recursive: true, force: true });
+  }
+}
+
+async function removeUnused(store: MediaStore, before: Date): Promise<void> {
+  const named = await SeriesMedia.findAll({ attributes: ['mediaId', 'draftMediaId'] });
+  const used = named.flatMap(({ mediaId, draftMediaId }) => [mediaId, draftMediaId]).filter((id) => id !== null);
+  for (const media of await Media.findAll({ where: { kind: 'video', id: { [Op.notIn]: used }, state: ['ready', 'failed'], updatedAt: { [Op.lt]: before } } })) {
+    // The row last: a file without a row would never be found again.
+    await Promise.all(Object.values(media.files).map(({ key }) => store.remove(key)));
+    await media.destroy();
   }
 }
