@@ -31,7 +31,7 @@ function strokesIn(svg: string): Drawn[] {
   });
 }
 
-describe.each([12, 13, 24, 25, 96, 97])('a band of %i picks on the loom', (picks) => {
+describe.each([12, 13, 24, 25, 96, 97])('C7: a band of %i picks on the loom', (picks) => {
   test.each([24, 66])('with %i ends begins opposite to the card at every end', (ends) => {
     const band = { technique: 'tabby', name: undefined, heightMm: picks * 3, colour: SLACK, yarn: 'Slack Water', picks, cover: 0.7, shapes: [] } as const;
     const piece = wovenPiece({ ends, widthMm: 400, bands: [band], loom: { insideWidthMm: 480, insideHeightMm: 900, bottomMm: 80 } });

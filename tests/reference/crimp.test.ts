@@ -54,7 +54,7 @@ function wave(p: number, D: number, h: number): Wave {
 }
 
 describe('a yarn between two crossings', () => {
-  test(`square cloth jams at p = D sin 60° with 0.2092 crimp and 60° (${PEIRCE}; exam answer 21 %)`, () => {
+  test(`26: square cloth jams at p = D sin 60° with 0.2092 crimp and 60° (${PEIRCE}; exam answer 21 %)`, () => {
     const jammed = wave(Math.sin(Math.PI / 3), 1, 0.5);
     expectClose(jammed.crimp, 0.209199576, 1e-8);
     expectPrinted(jammed.crimp, '0.2092');
@@ -64,11 +64,12 @@ describe('a yarn between two crossings', () => {
   });
 
   test.each([
-    ['p = D, h = D/2', 1, 1, 0.5, { crimp: 0.143501109, angleRad: 0.643501109 }],
-    ['p 4.2, h 1.8, D 2.4', 4.2, 2.4, 1.8, { lengthMm: 4.60105233, angleRad: 0.459367162, crimp: 0.095488649 }],
-    ['p 1.8, h 0.6, D 2.4', 1.8, 2.4, 0.6, { lengthMm: 1.91787515, angleRad: 0.445561254, crimp: 0.0654861927 }],
-    ['h = D = p', 1, 1, 1, { crimp: Math.PI / 2 - 1 }],
-  ] as const)('%s: closed form, bisection and the walked path agree', (_, p, D, h, expected) => {
+    ['27: p = D, h = D/2', 1, 1, 0.5, { crimp: 0.143501109, angleRad: 0.643501109 }],
+    ['28: h = D, r = 0.4', 2.5, 1, 1, { crimp: 0.0811218774 }],
+    ['30: p 4.2, h 1.8, D 2.4', 4.2, 2.4, 1.8, { lengthMm: 4.60105233, angleRad: 0.459367162, crimp: 0.095488649 }],
+    ['31: p 1.8, h 0.6, D 2.4', 1.8, 2.4, 0.6, { lengthMm: 1.91787515, angleRad: 0.445561254, crimp: 0.0654861927 }],
+    ['29: h = D = p', 1, 1, 1, { crimp: Math.PI / 2 - 1 }],
+  ] as const)('%s (closed form, bisection and the walked path agree)', (_, p, D, h, expected) => {
     const found = wave(p, D, h);
     for (const [key, value] of Object.entries(expected)) expectClose(found[key as keyof Wave], value, 1e-8);
     if (h < p) expectClose(found.lengthMm, bisect(p, D, h).lengthMm, 1e-9);
@@ -95,7 +96,7 @@ describe('a yarn between two crossings', () => {
 });
 
 describe('jamming', () => {
-  test.each([[0.85, 1.0535654, false], [0.87, 0.98610344, true]])(`equal yarns at p = %f D sum to %f (${PEIRCE})`, (p, sum, feasible) => {
+  test.each([[0.85, 1.0535654, false], [0.87, 0.98610344, true]])(`32: equal yarns at p = %f D sum to %f (${PEIRCE})`, (p, sum, feasible) => {
     expectClose(jammingSum(1, p, p), sum, 1e-7);
     expect(weftWaveRange(1, p, p) !== undefined).toBe(feasible);
   });
@@ -115,7 +116,7 @@ describe('jamming', () => {
     expectClose(wave(1.8, 2, max).lengthMm, 2 * wave(1.8, 2, max).angleRad, 1e-6);
   });
 
-  test('ends closer than both yarns together jam on a straight warp', () => {
+  test('33: ends closer than both yarns together jam on a straight warp (by definition)', () => {
     expect(pickGeometry({ spacingMm: 2, warpDiameterMm: 0.9, weftDiameterMm: 1.5, pickSpacingMm: 1.8, mode: 'straight-warp' })).toBeUndefined();
   });
 
@@ -133,12 +134,12 @@ describe('picks', () => {
     return pickLength(60, geometry);
   };
 
-  test('60 ends at 5 mm take 317.5085 mm a pick, and 328.1977 of two strands together (second way: arcs and lines added)', () => {
+  test('34: 60 ends at 5 mm take 317.5085 mm a pick, and 328.1977 of two strands together (second way: arcs and lines added)', () => {
     expectClose(lay(1), 317.5085, 1e-6);
     expectClose(lay(Math.SQRT2), 328.1977, 1e-6);
   });
 
-  test('a rug of 714 picks takes 449.3 yards, a tenth less than its book lists with reserve and tails (rigid-heddle project book)', () => {
+  const rug = () => {
     const warp = threadOf({ tex: texFromYardsPerPound(1600) }, 0.9);
     const weft = threadOf({ tex: texFromYardsPerPound(260) }, 0.84);
     const geometry = pickGeometry({
@@ -149,6 +150,11 @@ describe('picks', () => {
       mode: 'straight-warp',
     });
     if (geometry === undefined) throw new Error('jammed');
+    return { weft, geometry };
+  };
+
+  test('35: a rug of 714 picks takes 449.3 yards, a tenth less than its book lists with reserve and tails (rigid-heddle project book)', () => {
+    const { geometry } = rug();
     expectClose(geometry.diameterSumMm, 2.5808426, 1e-7);
     expectClose(geometry.tightness, 0.40643191, 1e-7);
     expectClose(geometry.crimp, 0.083791308, 1e-7);
@@ -157,7 +163,10 @@ describe('picks', () => {
     expectClose(yards, 449.3287, 1e-6);
     expect(495 / yards).toBeGreaterThan(1);
     expect(495 / yards).toBeLessThan(1.2);
-    // The square metre, selvedges apart (row 36): of the same order as Collingwood's half pound in a square foot.
+  });
+
+  test('36: the weft of that rug weighs 1709.57 g a square metre, of the order of half a pound in a square foot (P. Collingwood, second-hand)', () => {
+    const { weft, geometry } = rug();
     const gramsPerMetre = weft.tex / 1000;
     expectClose((gramsPerMetre * (1 + geometry.crimp)) / (geometry.pickSpacingMm / 1000), 1709.57, 1e-5);
     expectClose((0.5 * 453.59237) / 0.3048 ** 2, 2441.2138, 1e-7);

@@ -11,15 +11,15 @@ import { turnsPerMetre } from '#core/craft/spinning/twist.ts';
 import { expectClose } from './close.ts';
 
 describe('macramé cord', () => {
-  test('a hanging of 3 ft needs folded cords of 24 ft (macramelovers.com and thelarksheadshop.com)', () => {
+  test('59: a hanging of 3 ft needs folded cords of 24 ft (macramelovers.com and thelarksheadshop.com)', () => {
     expect(foldedCordLength(3)).toBe(24);
   });
 
-  test('40 cm knotted and 20 cm plain need 360 cm (urbaki.com, after a video on cord length)', () => {
+  test('60: 40 cm knotted and 20 cm plain need 360 cm (urbaki.com, after a video on cord length)', () => {
     expect(sectionedCordLength(40, 20)).toBe(360);
   });
 
-  test('a square knot of 3 mm cord takes at least 34.27 mm, and 50 are reported (path added up; same video)', () => {
+  test('61: a square knot of 3 mm cord takes at least 34.27 mm, and 50 are reported (path added up; same video)', () => {
     expectClose(leastSquareKnot(3), 34.274334, 1e-7);
     expect(leastSquareKnot(3)).toBeLessThan(50);
     expectClose(squareKnotCord(3), 50, 0.05);
@@ -63,13 +63,13 @@ describe('macramé cord', () => {
 });
 
 describe('knitting and crochet', () => {
-  test('48 by 8 in at 5 stitches are 320 yards by the knitters’ rule (perkyhobby.com), 282.67 by Munden’s constants', () => {
+  test('62: 48 by 8 in at 5 stitches are 320 yards by the knitters’ rule (perkyhobby.com), 282.67 by Munden’s constants', () => {
     expectClose(folkRuleYards(48, 8, 5), 320, 1e-12);
     const mm = knitYarn(48 * 25.4 * 8 * 25.4, 5 / 2.54);
     expectClose(mm / 914.4, 282.66667, 1e-6);
   });
 
-  test('a 5-inch square of single crochet held 785.5 in: 1.237 mm a square millimetre (windchilde.com)', () => {
+  test('63: a 5-inch square of single crochet held 785.5 in: 1.237 mm a square millimetre (windchilde.com)', () => {
     expectClose(yarnPerArea(785.5, 25), 31.42, 1e-12);
     expectClose(yarnPerArea(785.5 * 25.4, 25 * 25.4 ** 2), 1.2370079, 1e-7);
   });
@@ -79,35 +79,35 @@ describe('dyeing', () => {
   const pound = 453.59237;
   const ounce = pound / 16;
 
-  test.each([[14, 2.24], [8, 1.28], [7, 1.12]])('%f %% of a pound of wool are %f oz (leighsfiberjournal, 12 August 2024)', (percent, ounces) => {
+  test.each([[14, 2.24], [8, 1.28], [7, 1.12]])('64: %f %% of a pound of wool are %f oz (leighsfiberjournal, 12 August 2024)', (percent, ounces) => {
     expectClose(agentMass(pound, percent) / ounce, ounces, 1e-12);
   });
 
-  test('a quarter pound of alum and an ounce of tartar to the pound are 25 and 6.25 % (an old recipe at dyeing.ca)', () => {
+  test('65: a quarter pound of alum and an ounce of tartar to the pound are 25 and 6.25 % (an old recipe at dyeing.ca)', () => {
     expectClose(agentMass(pound, 25), pound / 4, 1e-12);
     expectClose(agentMass(pound, 6.25), ounce, 1e-12);
   });
 
-  test('4 gallons to the pound are 33.38 litres to the kilogram (definitions; a unit package)', () => {
+  test('66: 4 gallons to the pound are 33.38 litres to the kilogram (definitions; a unit package)', () => {
     const litres = 4 * new Qty('1 gallon').to('l').scalar;
     expectClose(litres / (pound / 1000), 33.381618, 1e-7);
     expectClose(bathLitres(pound, 33.381618), 4 * 3.785411784, 1e-7);
   });
 });
 
-test('a twist multiplier of 1 is 956.73 turns a metre at 1 tex, 30.25 at Nm 1 (definitions multiplied out)', () => {
+test('67: a twist multiplier of 1 is 956.73 turns a metre at 1 tex, 30.25 at Nm 1 (definitions multiplied out)', () => {
   expectClose(turnsPerMetre(1, 1), 956.73443, 1e-8);
   expectClose(turnsPerMetre(1, 1000), 30.254599, 1e-8);
   expectClose(turnsPerMetre(3.5, 59.0541247), 435.7469, 1e-6);
 });
 
 describe('felting', () => {
-  test('30 cm that felt to 20 have a factor of 1.5 (feltwest.org.au, shrinkage part 2)', () => {
+  test('68a: 30 cm that felt to 20 have a factor of 1.5 (feltwest.org.au, shrinkage part 2)', () => {
     expect(feltingFactor(30, 20)).toBe(1.5);
     expectClose(layoutFor(20, 1 / 3), 30, 1e-12);
   });
 
-  test('25 cm at 20 % are laid out at 31.25 (ilovefelt.com, size control)', () => {
+  test('68b: 25 cm at 20 % are laid out at 31.25 (ilovefelt.com, size control)', () => {
     expect(layoutFor(25, 0.2)).toBe(31.25);
   });
 });

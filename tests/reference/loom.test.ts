@@ -6,6 +6,7 @@ import { heightAfterShrinking, heightBeforeShrinking, topAllowance } from '#core
 import { endsPerMm, nailsUsed, staggeredPitch, workingSpacing, zigzagGaps } from '#core/craft/nails.ts';
 import { combinedUncertainty, marginFor, tolerableShortage, UNCERTAINTIES } from '#core/craft/purchase.ts';
 import { tapestryRate } from '#core/craft/time.ts';
+import { warpLength } from '#core/craft/warp.ts';
 import { inchesText, toInches } from '#core/units/inches.ts';
 import { expectClose, expectPrinted } from './close.ts';
 
@@ -26,26 +27,27 @@ function walkZigzag(ends: number): { readonly top: number; readonly bottom: numb
 }
 
 describe('nails and ends', () => {
-  test('nails a quarter inch apart, warped in a zigzag, give 8 ends to the inch (a published frame has 8 strands to the inch, webcasty.com 2013)', () => {
+  test('21: nails a quarter inch apart, warped in a zigzag, give 8 ends to the inch (a published frame has 8 strands to the inch, webcasty.com 2013)', () => {
     expectClose(endsPerMm({ pitchMm: INCH / 4, warping: 'zigzag' }) * INCH, 8, 1e-15);
   });
 
-  test('the warp of that frame, 20 in at 8 to the inch over 14 in and 2 yards for tying, is 64 yards', () => {
-    const yards = (20 * 8 * 14 * INCH) / YARD + 2;
+  test('22: the warp of that frame, 20 in at 8 to the inch over 14 in and 2 yards for tying, is 64 yards (webcasty.com 2013)', () => {
+    const run = { ends: 20 * 8, frameHeightMm: 14 * INCH, nailDiameterMm: 0, warpDiameterMm: 0, tieMm: YARD, wovenMm: 0, crimp: 0 };
+    const yards = warpLength(run) / YARD;
     expectClose(yards, 64.222222, 1e-7);
     expectPrinted(yards, '64');
   });
 
-  test('21 in at 4 to the inch are 84 ends (rigid-heddle project book, rug project)', () => {
+  test('23: 21 in at 4 to the inch are 84 ends (rigid-heddle project book, rug project)', () => {
     expect(endsFor(rawEnds(widthBeforeDrawIn(21 * INCH, 0), 4 / INCH), 1, 'any').count).toBe(84);
   });
 
-  test.each([[61, 31, 31], [62, 32, 31], [4, 3, 2], [5, 3, 3]])('%i ends use %i nails above and %i below, as walking the path shows', (ends, top, bottom) => {
+  test.each([[61, 31, 31], [62, 32, 31], [4, 3, 2], [5, 3, 3]])('24: %i ends use %i nails above and %i below, as walking the path shows', (ends, top, bottom) => {
     expect(nailsUsed(ends, 'zigzag')).toEqual({ top, bottom });
     expect(walkZigzag(ends)).toEqual({ top, bottom });
   });
 
-  test('a tenth of the height from a rail, gaps between zigzag ends alternate between 1 and 9 mm (lines from nail to nail)', () => {
+  test('25: a tenth of the height from a rail, gaps between zigzag ends alternate between 1 and 9 mm (lines from nail to nail)', () => {
     const u = 0.1;
     const fromNailToNail = (end: number): number => (end % 2 === 0 ? (end / 2) * 10 : ((end + 1) / 2) * 10 * (1 - u) + ((end - 1) / 2) * 10 * u);
     const { first, second } = zigzagGaps(u, 10);
@@ -65,12 +67,12 @@ describe('nails and ends', () => {
 });
 
 describe('allowances', () => {
-  test('10 in finished at 20 % shrinkage are woven 12.5 in wide, not 12 (Conference of Northern California Handweavers)', () => {
+  test('52: 10 in finished at 20 % shrinkage are woven 12.5 in wide, not 12 (Conference of Northern California Handweavers)', () => {
     expectClose(widthBeforeDrawIn(10, 0.2), 12.5, 1e-15);
     expectClose(12 * 0.8, 9.6, 1e-15);
   });
 
-  test('75 in woven that come off the loom as 65 relaxed by 13.333 % (therogueweaver.com, 22 August 2025)', () => {
+  test('53: 75 in woven that come off the loom as 65 relaxed by 13.333 % (therogueweaver.com, 22 August 2025)', () => {
     expectClose(heightBeforeShrinking(65, 1 - 65 / 75, 0), 75, 1e-12);
     expectClose(1 - 65 / 75, 0.13333333, 1e-7);
   });
@@ -86,14 +88,14 @@ describe('allowances', () => {
     expectClose(topAllowance(10, undefined), 40, 1e-12);
   });
 
-  test('8.1 in on the loom that finish at 7.5 drew in by 7.4 % (M. Petrini, August 2023)', () => {
+  test('54: 8.1 in on the loom that finish at 7.5 drew in by 7.4 % (M. Petrini, August 2023)', () => {
     expectClose(widthBeforeDrawIn(7.5, 0.074074074), 8.1, 1e-7);
     expectPrinted((1 - 7.5 / 8.1) * 100, '7.4');
   });
 });
 
 describe('hanging', () => {
-  test('a dowel for 600 g over half a metre is 11.5 mm thick, and then sags by a 360th (beam formula put in backwards)', () => {
+  test('55: a dowel for 600 g over half a metre is 11.5 mm thick, and then sags by a 360th (beam formula put in backwards)', () => {
     const d = leastDowelDiameter(600, 500);
     expectClose(d, 11.511267, 1e-6);
     const I = (Math.PI * (d / 1000) ** 4) / 64;
@@ -117,7 +119,7 @@ describe('margins', () => {
   });
 
   test.each([[50, 4.5], [75, 4.5], [100, 4.5], [25, 2.25], [150, 6.75], [250, 9], [400, 12], [800, 15]])(
-    'a prepacked ball of %i g may be %f g light (Directive 76/211/EEC, Annex I 2.4)',
+    '58: a prepacked ball of %i g may be %f g light (Directive 76/211/EEC, Annex I 2.4)',
     (nominal, shortage) => { expectClose(tolerableShortage(nominal), shortage, 1e-12); },
   );
 });
@@ -129,12 +131,12 @@ describe('display', () => {
     [13.77953, 'up', 16, '13 13/16'],
     [14.34175, 'up', 8, '14 3/8'],
     [12 + 1 / 32, 'nearest', 16, '12 1/16'],
-  ])('%f in, %s, is written in parts of %i as %s (counted on a rule)', (inches, round, parts, text) => {
+  ])('57: %f in, %s, is written in parts of %i as %s (counted on a rule)', (inches, round, parts, text) => {
     expect(inchesText(toInches(inches, parts, round))).toBe(text);
   });
 });
 
-test('3 ft² of tapestry in a 40-hour week at 6 to the inch are 69.677 cm² an hour (J. Soroka)', () => {
+test('56: 3 ft² of tapestry in a 40-hour week at 6 to the inch are 69.677 cm² an hour (J. Soroka)', () => {
   expectClose(tapestryRate(3), 69.67728, 1e-9);
   [5, 3, 2, 1].forEach((feet, index) => { expectPrinted(tapestryRate(feet), ['116.13', '69.677', '46.452', '23.226'][index] ?? ''); });
 });

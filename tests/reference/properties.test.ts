@@ -193,7 +193,7 @@ describe('whole pieces', () => {
         const { warnings: _b, ...imperial } = planOf(typedInInches(piece));
         const inches = numbersIn(imperial);
         expect({ ...imperial.ends, raw: 0, spacingMm: 0, woundWidthMm: 0, loomWidthMm: 0 }).toEqual({ ...metric.ends, raw: 0, spacingMm: 0, woundWidthMm: 0, loomWidthMm: 0 });
-        return numbersIn(metric).every((number, index) => near(inches[index] ?? Number.NaN, number, 1e-10));
+        return numbersIn(metric).every((number, index) => near(inches[index] ?? Number.NaN, number, 1e-12));
       }),
       { ...RUNS, numRuns: cases(1000) },
     );

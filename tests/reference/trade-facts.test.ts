@@ -31,19 +31,19 @@ const loftOf = (number: number): number => {
 };
 
 describe('spacing', () => {
-  test.each([5, 6])('C1: class %i is too thick for ends a quarter inch apart, and suits half an inch', (number) => {
+  test.each([5, 6])('C1a: class %i is too thick for ends a quarter inch apart, and suits half an inch', (number) => {
     expect(adviseSpacing(QUARTER, COMMON_WARP_MM, loftOf(number))).toBe('too-thick');
     expect(warnedOf(QUARTER, { class: number })).toContain('W_THICK');
     expect(warnedOf(HALF, { class: number })).not.toContain('W_THICK');
     expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('suits');
   });
 
-  test('C1: roving is too thick for a quarter inch', () => {
+  test('C1b: roving is too thick for a quarter inch', () => {
     expect(adviseSpacing(QUARTER, COMMON_WARP_MM, rovingDiameter(4000))).toBe('too-thick');
     expect(warnedOf(QUARTER, { tex: 4000, freeDiameterMm: rovingDiameter(4000) })).toContain('W_WARP_SHOWS');
   });
 
-  test.each([1, 2])('C1: class %i by itself is too thin for half an inch', (number) => {
+  test.each([1, 2])('C1c: class %i by itself is too thin for half an inch', (number) => {
     expect(adviseSpacing(HALF, COMMON_WARP_MM, loftOf(number))).toBe('too-thin');
     expect(warnedOf(HALF, { class: number })).toContain('W_LOOSE');
     expect(warnedOf(QUARTER, { class: number })).not.toContain('W_THICK');

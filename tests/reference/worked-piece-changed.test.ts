@@ -12,14 +12,14 @@ const problemsOf = (piece: unknown): readonly Problem[] => {
   return planned.ok ? [] : planned.problems;
 };
 
-test('in a frame of 500 mm it does not fit, and 392 mm of cloth would', () => {
+test('50: in a frame of 500 mm it does not fit, and 392 mm of cloth would (shares divided out by hand)', () => {
   const problems = problemsOf({ ...workedPiece, loom: { ...workedPiece.loom, insideHeightMm: 500 } });
   expect(problems.map(({ code, path }) => [code, path])).toEqual([['E_FIT', '/loom/insideHeightMm']]);
   expect(problems[0]?.message).toContain('39.2 cm');
   expect(problems[0]?.message).toContain('50.9 cm');
 });
 
-test('where the pattern asks for no parity, the ends stay at 61, on 31 nails above and below', () => {
+test('51: where the pattern asks for no parity, the ends stay at 61, on 31 nails above and below (path walked by hand)', () => {
   const { ends } = planOf({ ...workedPiece, warp: { ...workedPiece.warp, parity: 'any' } });
   expect([ends.count, ends.nailsTop, ends.nailsBottom]).toEqual([61, 31, 31]);
 });
@@ -29,7 +29,7 @@ test('ends pinned to an odd number are refused where even is asked for', () => {
   expect(problems.map(({ code, path }) => [code, path])).toEqual([['E_PARITY', '/warp/endCount']]);
 });
 
-describe('a tex that is no tex', () => {
+describe('13: a tex that is no tex (by definition)', () => {
   test.each([[0, 'E_RANGE'], [-5, 'E_RANGE'], [Number.NaN, 'E_NUM'], ['400', 'E_NUM']])('%s is refused as %s', (tex, code) => {
     const answer = reckon({ what: 'yarn', yarn: { tex } });
     expect(answer.ok ? [] : answer.problems.map((problem) => [problem.code, problem.path])).toEqual([[code, '/yarn/tex']]);

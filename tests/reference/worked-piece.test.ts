@@ -8,7 +8,7 @@ import { expectClose } from './close.ts';
 import { columnOf, IMPERIAL, METRIC } from './worked-piece.ts';
 import { figures, same, TABLE } from './worked-piece-table.ts';
 
-describe('the worked piece', () => {
+describe('49: the worked piece, metric and in inches (worked out by script, both ways)', () => {
   test('has every row of the table', () => {
     expect(new Set(TABLE.map(([row]) => row.split(' ')[0])).size).toBe(84);
     expect([...columnOf(METRIC).keys()]).toEqual(TABLE.map(([row]) => row));

@@ -37,30 +37,30 @@ const PEIRCE = 'Peirce 1937 as given by N. Balasubramanian';
 const from = (count: number, system: CountSystem) => ({ to: (other: CountSystem): number => countFromTex(texFromCount(count, system), other) });
 
 describe('converting counts', () => {
-  test.each<[string, number, string | undefined, number, string]>([
-    ['30 tex is cotton count', countFromTex(30, 'ne-cotton'), '19.7', 19.684708, ASTM_D2260],
-    ['cotton 10 is worsted', from(10, 'ne-cotton').to('ne-worsted'), '15', 15, ASTM_D2260],
-    ['cotton 1 is denier', from(1, 'ne-cotton').to('denier'), '5314.87', 5314.871227, ASTM_D2260],
-    ['Nm 1 is cotton', from(1, 'nm').to('ne-cotton'), '0.590541', 0.59054125, ASTM_D2260],
-    ['cotton 1 is Nm', from(1, 'ne-cotton').to('nm'), '1.69', 1.6933618, HNPE],
-    ['Nm 1 is worsted', from(1, 'nm').to('ne-worsted'), '0.885812', 0.88581187, ASTM_D2260],
-    ['Nm 1 is linen lea', from(1, 'nm').to('lea'), '1.65352', 1.6535155, ASTM_D2260],
-    ['Nm 1 is woollen run', from(1, 'nm').to('run'), '0.310034', 0.31003415, ASTM_D2260],
-    ['Nm 1 is yards in a pound', yardsPerPoundFromTex(texFromCount(1, 'nm')), '496.055', 496.05465, ASTM_D2260],
-    ['worsted 1 is Yorkshire skein', from(1, 'ne-worsted').to('yorkshire'), '2.1875', 2.1875, '256 yd in a pound, by definition'],
-    ['a grain in 120 yd is tex', texFromCount(1, 'grain'), '0.590541', 0.59054125, ASTM_D2260],
-    ['jute 1 is tex', texFromCount(1, 'jute'), '34.45', 34.448239, HNPE],
-    ['jute 1 is Nm', from(1, 'jute').to('nm'), '29.03', 29.02906, HNPE],
-    ['jute 1 is denier', from(1, 'jute').to('denier'), '310.03', 310.03415, HNPE],
-    ['worsted 1 is denier', from(1, 'ne-worsted').to('denier'), '7972.3', 7972.3068, HNPE],
-    ['lea 1 is denier', from(1, 'lea').to('denier'), '14882', 14881.639, HNPE],
-    ['200 m in 100 g is tex', texFromMetresPer100g(200), '500', 500, 'definition'],
-    ['200 m in 100 g is Nm', countFromTex(500, 'nm'), '2', 2, 'definition'],
-    ['200 m in 100 g is yards in a pound', yardsPerPoundFromTex(500), undefined, 992.1093, 'derived'],
-    ['spun silk 1 is cotton', from(1, 'spun-silk').to('ne-cotton'), '1', 1, 'both 840 yd in a pound, by definition'],
-    ['100 decitex is tex', texFromCount(100, 'dtex'), '10', 10, 'definition'],
-    ['a yard in an ounce is tex', texFromYardsPerOunce(1), undefined, 31003.41549, 'derived'],
-  ])('%s', (_, actual, printed, exact) => {
+  test.each<[string, string, number, string | undefined, number]>([
+    ['1: 30 tex is cotton count', ASTM_D2260, countFromTex(30, 'ne-cotton'), '19.7', 19.684708],
+    ['2: cotton 10 is worsted', ASTM_D2260, from(10, 'ne-cotton').to('ne-worsted'), '15', 15],
+    ['3: cotton 1 is denier', ASTM_D2260, from(1, 'ne-cotton').to('denier'), '5314.87', 5314.871227],
+    ['Nm 1 is cotton', ASTM_D2260, from(1, 'nm').to('ne-cotton'), '0.590541', 0.59054125],
+    ['cotton 1 is Nm', HNPE, from(1, 'ne-cotton').to('nm'), '1.69', 1.6933618],
+    ['4a: Nm 1 is worsted', ASTM_D2260, from(1, 'nm').to('ne-worsted'), '0.885812', 0.88581187],
+    ['4b: Nm 1 is linen lea', ASTM_D2260, from(1, 'nm').to('lea'), '1.65352', 1.6535155],
+    ['4c: Nm 1 is woollen run', ASTM_D2260, from(1, 'nm').to('run'), '0.310034', 0.31003415],
+    ['5: Nm 1 is yards in a pound', ASTM_D2260, yardsPerPoundFromTex(texFromCount(1, 'nm')), '496.055', 496.05465],
+    ['6: worsted 1 is Yorkshire skein', '256 yd in a pound, by definition', from(1, 'ne-worsted').to('yorkshire'), '2.1875', 2.1875],
+    ['a grain in 120 yd is tex', ASTM_D2260, texFromCount(1, 'grain'), '0.590541', 0.59054125],
+    ['7a: jute 1 is tex', HNPE, texFromCount(1, 'jute'), '34.45', 34.448239],
+    ['7b: jute 1 is Nm', HNPE, from(1, 'jute').to('nm'), '29.03', 29.02906],
+    ['7c: jute 1 is denier', HNPE, from(1, 'jute').to('denier'), '310.03', 310.03415],
+    ['worsted 1 is denier', HNPE, from(1, 'ne-worsted').to('denier'), '7972.3', 7972.3068],
+    ['lea 1 is denier', HNPE, from(1, 'lea').to('denier'), '14882', 14881.639],
+    ['200 m in 100 g is tex', 'definition', texFromMetresPer100g(200), '500', 500],
+    ['200 m in 100 g is Nm', 'definition', countFromTex(500, 'nm'), '2', 2],
+    ['200 m in 100 g is yards in a pound', 'derived', yardsPerPoundFromTex(500), undefined, 992.1093],
+    ['spun silk 1 is cotton', 'both 840 yd in a pound, by definition', from(1, 'spun-silk').to('ne-cotton'), '1', 1],
+    ['100 decitex is tex', 'definition', texFromCount(100, 'dtex'), '10', 10],
+    ['a yard in an ounce is tex', 'derived', texFromYardsPerOunce(1), undefined, 31003.41549],
+  ])('%s (%s)', (_, __, actual, printed, exact) => {
     expectClose(actual, exact, 1e-7);
     if (printed !== undefined) expectPrinted(actual, printed);
   });
@@ -91,25 +91,25 @@ describe('converting counts', () => {
 });
 
 describe('folded and plied yarn', () => {
-  test(`60s with 40s cotton make 24s (${TAYLOR})`, () => {
+  test(`8: 60s with 40s cotton make 24s (${TAYLOR})`, () => {
     expectClose(countFromTex(texOfFolded([texFromCount(60, 'ne-cotton'), texFromCount(40, 'ne-cotton')]), 'ne-cotton'), 24, 1e-12);
   });
 
-  test(`8/2 cotton has 3360 yards in a pound (${ASHENHURST})`, () => {
+  test(`9: 8/2 cotton has 3360 yards in a pound (${ASHENHURST})`, () => {
     const tex = readCount('8/2', 'ne-cotton')?.tex ?? 0;
     expectClose(yardsPerPoundFromTex(tex), 3360, 1e-12);
     expectClose(tex, 147.63531, 1e-7);
     expectClose(metresPer100gFromTex(tex), 677.34473, 1e-7);
   });
 
-  test('8/4 cotton sold as 1600 yards in a pound lost 4.762 % to twist (label in a rigid-heddle project book)', () => {
+  test('10: 8/4 cotton sold as 1600 yards in a pound lost 4.762 % to twist (label in a rigid-heddle project book)', () => {
     const untwisted = readCount('8/4', 'ne-cotton')?.tex ?? 0;
     expectClose(1 - untwisted / texFromYardsPerPound(1600), 0.047619048, 1e-7);
     expectClose(twistContraction([untwisted], texFromYardsPerPound(1600)), 0.047619048, 1e-7);
     expectClose(texOfFolded([untwisted], 0.0476190476), texFromYardsPerPound(1600), 1e-8);
   });
 
-  test('2/16 Nm is 125 tex, 800 m in 100 g (derived)', () => {
+  test('11: 2/16 Nm is 125 tex, 800 m in 100 g (derived)', () => {
     const read = readCount('2/16', 'nm');
     expect(read).toMatchObject({ plies: 2, count: 16 });
     expectClose(read?.tex ?? 0, 125, 1e-12);
@@ -117,7 +117,7 @@ describe('folded and plied yarn', () => {
     expectClose(yardsPerPoundFromTex(125), 3968.4372, 1e-7);
   });
 
-  test('2/8 cotton is doubtful, because sellers write it both ways (common practice)', () => {
+  test('12: 2/8 cotton is doubtful, because sellers write it both ways (common practice)', () => {
     expect(readCount('2/8', 'ne-cotton')).toMatchObject({ doubt: 'which-is-plies', plies: 2 });
   });
 
@@ -145,14 +145,14 @@ describe('weight classes', () => {
 });
 
 describe('diameters', () => {
-  test(`cotton 1 at 1.1 cm³/g is a 28th of an inch (${PEIRCE})`, () => {
+  test(`14: cotton 1 at 1.1 cm³/g is a 28th of an inch (${PEIRCE})`, () => {
     const inches = diameterFromVolume(texFromCount(1, 'ne-cotton'), 1.1) / 25.4;
     expectClose(1 / inches, 27.929116, 1e-7);
     expectClose(1 / inches, 28, 0.003);
   });
 
   test.each([[15, 106.637, 106.5], [32, 155.754, 156], [60, 213.274, 213], [200, 389.384, 390]])(
-    `cotton %i at K 0.95 lies %f to the inch (${TAYLOR})`,
+    `15: cotton %i at K 0.95 lies %f to the inch (${TAYLOR})`,
     (count, exact, printed) => {
       const threads = ashenhurstNumber(texFromCount(count, 'ne-cotton'), 0.95);
       expectClose(threads, exact, 1e-5);
@@ -160,18 +160,18 @@ describe('diameters', () => {
     },
   );
 
-  test(`1/d in inches is 29.3 √(count/volume) (${PEIRCE})`, () => {
+  test(`16: 1/d in inches is 29.3 √(count/volume) (${PEIRCE})`, () => {
     const factor = 25.4 / diameterFromVolume(texFromCount(1, 'ne-cotton'), 1);
     expectClose(factor, 29.292304, 1e-7);
     expectPrinted(factor, '29.3');
   });
 
-  test.each([[0.9, 1.2610804], [0.84, 1.4476688], [0.95, 1.1318284]])('K %f is a volume of %f cm³/g (derived)', (k, volume) => {
+  test.each([[0.9, 1.2610804], [0.84, 1.4476688], [0.95, 1.1318284]])('17: K %f is a volume of %f cm³/g (derived)', (k, volume) => {
     expectClose(volumeOfAshenhurst(k), volume, 1e-7);
     expectClose(diameterFromVolume(500, volume), compressedDiameter(500, k), 1e-7);
   });
 
-  test(`8/2 cotton: 52 threads, 26 plain, 34 in 2/2 twill (${ASHENHURST})`, () => {
+  test(`18: 8/2 cotton: 52 threads, 26 plain, 34 in 2/2 twill (${ASHENHURST})`, () => {
     const threads = ashenhurstNumber(readCount('8/2', 'ne-cotton')?.tex ?? 0, 0.9);
     expectClose(threads, 52.168956, 1e-7);
     expectPrinted(threads, '52');
@@ -192,7 +192,7 @@ describe('diameters', () => {
     expectClose(squareMaximum(1), 0.57735027, 1e-7);
   });
 
-  test('20 tex with 10 turns a centimetre at 32° (GATE textile engineering 2005, question 71)', () => {
+  test('19: 20 tex with 10 turns a centimetre at 32° (GATE textile engineering 2005, question 71)', () => {
     const diameter = diameterFromTwist((32 * Math.PI) / 180, 1);
     expectClose(diameter, 0.19890209, 1e-6);
     const volume = ((diameter / 10) ** 2 * Math.PI) / 4 / 20 * 1e5;
@@ -201,7 +201,7 @@ describe('diameters', () => {
     expectClose(volume, 1.57, 0.011);
   });
 
-  test('a yarn of 14 wraps is set at 7 to the inch in balanced plain weave (aethelfliedbrewbane.wordpress.com, 8 March 2017)', () => {
+  test('20: a yarn of 14 wraps is set at 7 to the inch in balanced plain weave (aethelfliedbrewbane.wordpress.com, 8 March 2017)', () => {
     expect(balancedSett(14, 'plain')).toBe(7);
     expectClose(balancedSett(14, 'twill-2-2'), 28 / 3, 1e-15);
   });
