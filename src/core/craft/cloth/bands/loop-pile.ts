@@ -38,8 +38,10 @@ export function drawLoopPile(band: LoopPileBand, height: number, weave: Weave): 
 
 /** One hanging loop at every second end, where the row lies on the face; two rows of tabby between put the next one's beside them. */
 function loopsIn(row: number, hang: number, weave: Weave): string {
-  const { ends, end, width, begin } = weave;
-  const raised = loopRow({ first: 0, last: ends - 1 }, row, 'right').filter((pass) => pass.raised === 'loop');
+  const { ends, end, width, begin, grouped } = weave;
+  /* A drawn end that stands for several has loops among them, though the last one is plain. */
+  const beyond = grouped >= 2 ? 1 : 0;
+  const raised = loopRow({ first: -beyond, last: ends - 1 + beyond }, row, 'right').filter((pass) => pass.raised === 'loop');
   return raised
     .map(({ from }) => {
       const middle = begin === 'head' ? width - (from + 0.5) * end : (from + 0.5) * end;

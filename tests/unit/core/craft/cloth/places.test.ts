@@ -26,6 +26,12 @@ describe('loops', () => {
     }
   });
 
+  it('reach to the edges of a picture whose ends each stand for several', () => {
+    const strip = drawCloth(wovenPiece({ bands: [LOOPS] }), { id: 'a', as: 'strip', width: 36, height: 60 });
+    const [first] = strokesIn(strip, light(RUST, 0.3)).filter(({ dash }) => dash.length === 0).map(({ d }) => linesOf(d));
+    expect(first).toBe(3);
+  });
+
   it('of the next row stand beside those below them', () => {
     const [upper, lower] = rows.map(({ d }) => begins(d)[0] ?? 0);
     expect(Math.abs((upper ?? 0) - (lower ?? 0))).toBeCloseTo(10, 0);
