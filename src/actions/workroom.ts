@@ -3,9 +3,11 @@ import {
   GatheringForm, GatheringItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
   NewGatheringForm, NewLessonForm, NewSeriesForm, SeriesDetailsForm, SeriesForm,
 } from '#contracts/workroom.ts';
+import { partsList } from '#core/series/parts-list.ts';
 import { clockWords } from '#core/moment-words.ts';
 import type { Context } from '#server/context.ts';
 import { signedIn } from '#server/errors.ts';
+import { publishPart } from '#server/use-cases/series/publish-part.ts';
 import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 import { takeBackSeries } from '#server/use-cases/series/take-back-series.ts';
 import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatheringItem, type LinePlace } from '#server/use-cases/workroom/change-gathering.ts';
@@ -32,8 +34,12 @@ export const workroom = {
     return { to: seriesAt(input.series, '#words'), said: savedNow(ctx) };
   }),
   publish: formAction(SeriesForm, async ({ series }, ctx) => {
-    await publishSeries(ctx, series);
-    return { to: seriesAt(series), said: 'Published. Students read it from now on.' };
+    const { out, held } = await publishSeries(ctx, series);
+    return { to: seriesAt(series), said: held.length === 0 ? 'Published. Students read it from now on.' : `Published: ${partsList(out)}. ${partsList(held)} ${held.length === 1 ? 'waits until it is' : 'wait until they are'} ready.` };
+  }),
+  publishPart: formAction(LessonForm, async ({ lesson }, ctx) => {
+    const part = await publishPart(ctx, lesson);
+    return { to: seriesAt(part.series, `#part-${part.publicId}`), said: `Part ${part.number} is published. Who has a seat gets a letter when it opens to her, once.` };
   }),
   takeBack: formAction(SeriesForm, async ({ series }, ctx) => {
     await takeBackSeries(ctx, series);

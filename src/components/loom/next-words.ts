@@ -28,6 +28,10 @@ export function nextWords(facts: NextFacts): NextWords {
   const { seat, next } = facts;
   const address = `/series/${seat.slug}`;
   const { name } = titleHalves(seat.title);
+  if (next.act === 'finished' && seat.partsToCome > 0) {
+    const to = seat.parts.length + 1;
+    return { where: '', heading: `Part ${to} is being written.`, lead: 'Every part that is out is done. You get a letter when the next one opens to you.', act: { label: 'See the parts again', href: `${address}/1` }, loomSide: undefined };
+  }
   if (next.act === 'finished') {
     return { where: '', heading: `${name} is off the loom.`, lead: 'Every part is done. What you learned stays open to you, as long as you like.', act: { label: 'See the parts again', href: `${address}/1` }, loomSide: undefined };
   }

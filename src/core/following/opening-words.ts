@@ -35,3 +35,8 @@ export function opensShort({ standing, awaited, timeZone }: OpeningFacts): strin
   if (standing.until === 'date') return `Opens ${dayWords(standing.opensAt, timeZone)}`;
   return awaited === undefined ? 'Opens later' : `Opens after your photo of Part ${awaited.number}`;
 }
+
+/** Of a part that is not published yet: `Being written`, and from which day on it can open, where a date says so. */
+export function beingWritten(notBefore: Date | null, now: Date, timeZone: string): string {
+  return notBefore === null || notBefore <= now ? 'Being written' : `Being written, comes on ${dayWords(notBefore, timeZone)} at the earliest`;
+}

@@ -5,8 +5,8 @@ import type { Material } from '#core/craft/craft.ts';
 import { craftOf, type Piece } from '#core/craft/crafts.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
 import type { Yarn } from '#core/craft/piece.ts';
-import { listed } from '#core/listed.ts';
 import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
+import { partsList } from '#core/series/parts-list.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 
@@ -126,18 +126,10 @@ function weightWords({ amountKey }: MergedLine, material: Material | undefined, 
   return material.balls === undefined ? weight : `${weight}, ${material.balls === 1 ? '1 ball' : `${material.balls} balls`}`;
 }
 
-/** `Parts 2, 3 and 5 to 7.` */
+/** `Parts 2, 3 and 5 to 7, kept until Part 9` */
 export function partsWords(parts: readonly number[], untilPart: number | null): string {
-  const runs: number[][] = [];
-  for (const part of [...parts].sort((a, b) => a - b)) {
-    const run = runs.at(-1);
-    if (run !== undefined && run.at(-1) === part - 1) run.push(part);
-    else runs.push([part]);
-  }
-  const words = runs.flatMap((run) => (run.length > 2 ? [`${run[0] ?? ''} to ${run.at(-1) ?? ''}`] : run.map(String)));
   const last = Math.max(...parts);
-  const kept = untilPart !== null && untilPart > last ? `, kept until Part ${untilPart}` : '';
-  return `${parts.length === 1 ? 'Part' : 'Parts'} ${listed(words)}${kept}`;
+  return `${partsList(parts)}${untilPart !== null && untilPart > last ? `, kept until Part ${untilPart}` : ''}`;
 }
 
 export interface YarnSum {

@@ -34,6 +34,8 @@ export interface SeatOnLoom {
   readonly pattern: Piece | null;
   readonly mine: MyPiece;
   readonly parts: readonly PartOnLoom[];
+  /** Parts behind those that are published: still being written. */
+  readonly partsToCome: number;
 }
 
 export interface PaidOrder {
@@ -65,6 +67,8 @@ interface PartRow {
 
 const SEATS = `
   SELECT e.id AS enrolmentId, e.public_id AS publicId, e.started_at AS startedAt, s.id AS seriesId, s.slug, s.title, s.craft,
+         (SELECT COUNT(*) FROM lessons l WHERE l.series_id = s.id AND l.taken_out_at IS NULL AND l.published_version_id IS NULL
+             AND l.position > COALESCE((SELECT MAX(o.position) FROM lessons o WHERE o.series_id = s.id AND o.taken_out_at IS NULL AND o.published_version_id IS NOT NULL), 0)) AS partsToCome,
          u.name AS teacherName, w.answer_days AS answerDays, p.data AS pattern, m.data AS mine
     FROM enrolments e
     JOIN series s ON s.id = e.series_id

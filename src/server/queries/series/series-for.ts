@@ -45,15 +45,25 @@ export interface SeriesFor {
   readonly workroom: { readonly id: number; readonly handle: string; readonly name: string; readonly teacherName: string; readonly answerDays: number; readonly timeZone: string };
   readonly seat: { readonly enrolmentId: number; readonly publicId: string; readonly startedAt: Date } | null;
   readonly parts: readonly PartFor[];
+  /** Parts behind the last one that can be read: they are still being written. Empty for who looks after the series. */
+  readonly toCome: readonly PartToCome[];
 }
 
-interface SeriesRow extends Omit<SeriesFor, 'workroom' | 'seat' | 'parts'> {
+/** A part that nobody can read yet. */
+export interface PartToCome {
+  readonly number: number;
+  readonly title: string;
+  /** Before this moment it does not open, however soon it is written; null where no date says so. */
+  readonly notBefore: Date | null;
+}
+
+interface SeriesRow extends Omit<SeriesFor, 'workroom' | 'seat' | 'parts' | 'toCome'> {
   workroomId: number; handle: string; workroomName: string; teacherName: string; answerDays: number; timeZone: string;
   enrolmentId: number | null; enrolmentPublicId: string | null; startedAt: Date | null;
 }
 
 interface PartRow {
-  id: number; publicId: string; title: string; minutes: number; isPreview: number; opens: OpeningRule; checkpoint: Checkpoint | null;
+  id: number; publicId: string; title: string; minutes: number; isPreview: number; opens: OpeningRule; opensAt: Date | null; checkpoint: Checkpoint | null;
   publishedVersionId: number | null; verdict: Verdict | null; wovenOn: number; finishedAt: Date | null;
 }
 
@@ -68,7 +78,7 @@ const SERIES = `
    WHERE s.slug = :slug`;
 
 const PARTS = `
-  SELECT l.id, l.public_id AS publicId, l.title, l.minutes, l.is_preview AS isPreview, l.opens, l.checkpoint, l.published_version_id AS publishedVersionId,
+  SELECT l.id, l.public_id AS publicId, l.title, l.minutes, l.is_preview AS isPreview, l.opens, l.opens_at AS opensAt, l.checkpoint, l.published_version_id AS publishedVersionId,
          v.finished_at AS finishedAt,
          (SELECT p.verdict FROM progress_photos p WHERE p.enrolment_id = :enrolmentId AND p.lesson_id = l.id ORDER BY p.created_at DESC, p.id DESC LIMIT 1) AS verdict,
          EXISTS (SELECT 1 FROM progress_photos p WHERE p.enrolment_id = :enrolmentId AND p.lesson_id = l.id AND p.verdict = 'weave-on') AS wovenOn
@@ -87,10 +97,12 @@ export async function seriesFor(actor: Actor | null, slug: string, now: Date): P
   const visible = mayLookAfter ? rows : rows.filter(({ publishedVersionId }) => publishedVersionId !== null);
   const wovenOn = new Set(rows.filter((part) => part.wovenOn === 1).map(({ publicId }) => publicId));
   const parts = visible.map((part, index) => partFor(actor, row, part, index + 1, wovenOn, now));
-  return { ...presentRow(row), parts };
+  const behind = mayLookAfter ? [] : rows.slice(rows.findLastIndex(({ publishedVersionId }) => publishedVersionId !== null) + 1);
+  const toCome = behind.map(({ title, opensAt }, index) => ({ number: parts.length + index + 1, title, notBefore: opensAt }));
+  return { ...presentRow(row), parts, toCome };
 }
 
-function presentRow(row: SeriesRow): Omit<SeriesFor, 'parts'> {
+function presentRow(row: SeriesRow): Omit<SeriesFor, 'parts' | 'toCome'> {
   const { workroomId, handle, workroomName, teacherName, answerDays, timeZone, enrolmentId, enrolmentPublicId, startedAt, ...series } = row;
   return {
     ...series,
@@ -108,6 +120,6 @@ function partFor(actor: Actor | null, series: SeriesRow, part: PartRow, number: 
     isPreview: part.isPreview === 1,
     seat: standing === null ? null : { active: true, standing },
   });
-  const { wovenOn: _wovenOn, isPreview, ...rest } = part;
+  const { wovenOn: _wovenOn, opensAt: _opensAt, isPreview, ...rest } = part;
   return { ...rest, isPreview: isPreview === 1, number, access };
 }

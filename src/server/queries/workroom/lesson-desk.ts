@@ -4,12 +4,15 @@ import type { Checkpoint } from '#contracts/lesson.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
 import type { Piece } from '#core/craft/crafts.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
+import { whatIsMissing, type Missing } from '#core/series/missing.ts';
+import { partMayGoOut, type PartMayGoOut } from '#core/series/publishing-order.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { GatheringItem, Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
+import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
 export interface PartOfSeries {
   readonly id: number;
@@ -52,6 +55,10 @@ export interface LessonDesk {
   readonly draft: { readonly source: string; readonly revision: number; readonly reading: LessonText | RefusedText };
   /** What students read; null before it was published. */
   readonly published: { readonly number: number; readonly at: Date; readonly source: string } | null;
+  /** What it lacks before it can be published, and what is worth a look. */
+  readonly missing: readonly Missing[];
+  /** Whether its draft may go out by itself; null for a part that was taken out. */
+  readonly mayGoOut: PartMayGoOut | null;
   /** Its gathering list, in order. */
   readonly list: readonly ListLine[];
   readonly pattern: Piece | null;
@@ -72,7 +79,7 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
   const lesson = await Lesson.findOne({ where: { publicId, seriesId: series.id } });
   if (lesson === null) return null;
-  const [workroom, others, version, list, piece, media, seats] = await Promise.all([
+  const [workroom, others, version, list, piece, media, seats, { inHand, drafts }] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
     Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['id', 'publicId', 'title', 'checkpoint', 'opens'] }),
     lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
@@ -80,13 +87,18 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
     PatternPiece.findByPk(series.id),
     mediaOnDesk(series.id),
     sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
+    seriesInHand(series),
   ]);
   const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));
+  const missing = whatIsMissing(inHand);
+  const number = parts.find((part) => part.publicId === publicId)?.number ?? null;
   const { title, minutes, isPreview, opens, checkpoint, draftSource, draftRevision, draftReading } = lesson;
   return {
     series: { id: series.id, slug, title: series.title, state: series.state, workroomName: workroom.name, timeZone: workroom.timeZone },
     parts,
-    number: parts.find((part) => part.publicId === publicId)?.number ?? null,
+    number,
+    missing: missing.filter(({ part }) => part === number && part !== null),
+    mayGoOut: number === null ? null : partMayGoOut(number, drafts.map((draft, index) => ({ number: index + 1, isPublished: draft.lesson.publishedVersionId !== null })), missing),
     publicId, title, minutes, isPreview, opens, checkpoint,
     draft: { source: draftSource, revision: draftRevision, reading: draftReading },
     published: version === null ? null : { number: version.number, at: version.createdAt, source: version.source },
