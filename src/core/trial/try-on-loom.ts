@@ -12,8 +12,8 @@ export type Trial =
   /** Something typed cannot be used. */
   | { readonly ok: false; readonly fields: LoomFaults }
   | { readonly ok: true; readonly fits: true; readonly mine: MyPiece; readonly fitted: FittedPiece<FrameLoomPiece>; readonly warnings: readonly Problem[]; readonly freeMm: number; readonly narrowed: boolean }
-  /** `widest` is the piece as wide as the loom allows at this spacing; null when nothing worth weaving fits. */
-  | { readonly ok: true; readonly fits: false; readonly says: string; readonly widest: FittedPiece<FrameLoomPiece> | null };
+  /** `codes` are those of the problems that `says` tells; `widest` is the piece as wide as the loom allows at this spacing; null when nothing worth weaving fits. */
+  | { readonly ok: true; readonly fits: false; readonly says: string; readonly codes: readonly string[]; readonly widest: FittedPiece<FrameLoomPiece> | null };
 
 /** The engine's own limit: a loom on which any pattern has room. */
 const BOUNDLESS_MM = 20_000;
@@ -29,10 +29,10 @@ export function tryOnLoom(pattern: FrameLoomPiece, title: string, typed: TypedLo
   const onLoom: MyPiece = { loom: read.loom, endsTogether: ends };
   const asPattern = fitPiece(pattern, onLoom, units);
   if (asPattern.ok) return fitting(onLoom, asPattern.value, asPattern.warnings, read.loom.insideWidthMm, false);
-  if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), widest: null };
+  if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), codes: codesOf(asPattern.problems), widest: null };
   const widest = widestThatFits(pattern, onLoom, units);
   if (typed.narrower && widest !== null) return fitting(widest.mine, widest.fitted, widest.warnings, read.loom.insideWidthMm, true);
-  return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.mine.widthMm ?? null), widest: widest?.fitted ?? null };
+  return { ok: true, fits: false, says: tooWide(pattern, title, onLoom, units, widest?.mine.widthMm ?? null), codes: codesOf(asPattern.problems), widest: widest?.fitted ?? null };
 }
 
 function fitting(mine: MyPiece, fitted: FittedPiece<FrameLoomPiece>, warnings: readonly Problem[], insideWidthMm: number, narrowed: boolean): Trial {
@@ -41,6 +41,7 @@ function fitting(mine: MyPiece, fitted: FittedPiece<FrameLoomPiece>, warnings: r
 }
 
 const isTooWide = (problems: readonly Problem[]): boolean => problems.every(({ code, path }) => code === 'E_FIT' && path === '/loom/insideWidthMm');
+const codesOf = (problems: readonly Problem[]): readonly string[] => [...new Set(problems.map(({ code }) => code))];
 const sentences = (problems: readonly Problem[]): string => [...new Set(problems.map(({ message }) => message))].join(' ');
 
 interface Widest {

@@ -1,5 +1,6 @@
 import type { Judgement } from '#core/craft/piece-form/judge-typed.ts';
 import { fieldId } from '#islands/ui/field-id.ts';
+import { Findings } from '#islands/ui/Findings.tsx';
 import { useHands } from './hands.ts';
 import { placeOfField } from './piece-form-state.ts';
 
@@ -34,7 +35,7 @@ export function FormHead({ series, saved, summary, judged, isTried, isChanged }:
         <div className="notice notice-mend" role="alert" tabIndex={-1} id="piece-errors">
           <p className="h4">{problems.length === 0 ? summary : problems.length === 1 ? 'One thing does not work yet. Nothing typed is lost.' : `${String(problems.length)} things do not work yet. Nothing typed is lost.`}</p>
           {problems.length > 0 && summary !== '' && <p>{summary}</p>}
-          <ul>{problems.map((problem) => <li key={`${problem.field}${problem.says}`}><ProblemLink {...problem} /></li>)}</ul>
+          <Findings found={problems.map((problem) => ({ code: problem.code, says: <ProblemLink {...problem} /> }))} />
         </div>
       )}
     </header>

@@ -8,6 +8,7 @@ import { yarnTable } from '#core/gathering/yarn-table.ts';
 import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { fieldId } from '#islands/ui/field-id.ts';
+import { Findings } from '#islands/ui/Findings.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
 import { placeOfField } from './piece-form-state.ts';
@@ -35,7 +36,7 @@ export function PiecePlan({ made, isOld, warnings, typed }: PiecePlanProps) {
       {warnings.length > 0 && (
         <div className="notice">
           <h3 className="h4">Worth a look</h3>
-          <ul className="small stack stack-tight">{warnings.map(({ field, says }) => <li key={`${field}${says}`}><a href={`#${fieldId(field)}`}>{placeOfField(field, typed) || 'The piece'}</a>: {says}</li>)}</ul>
+          <Findings found={warnings.map(({ field, says, code }) => ({ code, says: <><a href={`#${fieldId(field)}`}>{placeOfField(field, typed) || 'The piece'}</a>: {says}</> }))} />
         </div>
       )}
     </aside>

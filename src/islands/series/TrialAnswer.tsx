@@ -9,6 +9,7 @@ import type { Units } from '#core/units/units.ts';
 import { EveryNumber } from '#islands/series/EveryNumber.tsx';
 import { fittedBy, type MadeOnLoom } from '#islands/series/trial.ts';
 import { Figures, type Figure } from '#islands/ui/Figures.tsx';
+import { CodeWords, Findings } from '#islands/ui/Findings.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 
 interface TrialAnswerProps {
@@ -37,6 +38,7 @@ export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHre
         {trial.ok && own && (trial.fits ? <p><Flag kind="on">It fits your loom</Flag></p> : <p><Flag kind="mend">It does not fit yet</Flag></p>)}
         {trial.ok && !trial.fits && <p className="mt-3">{trial.says}{trial.widest !== null && <> <a href={narrowerHref} onClick={here(true)}>See it so</a>.</>}</p>}
       </div>
+      {trial.ok && !trial.fits && trial.codes.map((code) => <CodeWords key={code} code={code} />)}
       {fitted !== null && <Figures items={figuresOf(fitted, asPattern, units, own)} />}
       {trial.ok && trial.fits && own && (
         <div className="small stack stack-tight">
@@ -45,7 +47,7 @@ export function TrialAnswer({ teacher, asPattern, trial, units, own, narrowerHre
             {amountText(lengthOf(trial.freeMm, 'size'), units)} stay free on either side of the warp, for the hand and the shuttle.
           </p>
           {trial.fitted.changes.length > 0 && <p>{trial.fitted.changes.filter((says) => !trial.narrowed || !says.startsWith('The piece is')).join(' ')}</p>}
-          {trial.warnings.map(({ message }) => <p key={message}>{message}</p>)}
+          <Findings found={trial.warnings.map(({ code, message }) => ({ code, says: message }))} />
           <p className="quiet">For a frame {amountText(lengthOf(trial.fitted.piece.loom.insideHeightMm, 'size'), units)} from nail to nail upright, as the pattern’s. {amountText(lengthOf(trial.fitted.plan.loom.heightNeededMm, 'least'), units)} are enough.</p>
         </div>
       )}

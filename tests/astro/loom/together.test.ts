@@ -1,3 +1,4 @@
+import react from '@astrojs/react/server.js';
 import { experimental_AstroContainer as AstroContainer } from 'astro/container';
 import { JSDOM } from 'jsdom';
 import { expect, test } from 'vitest';
@@ -7,6 +8,7 @@ import { lowTide } from '../../support/low-tide.ts';
 test('two pieces are shopped for as one: each yarn once, with its balls and what is left over', async () => {
   const piece = await lowTide();
   const container = await AstroContainer.create();
+  container.addServerRenderer({ name: '@astrojs/react', renderer: react });
   const html = await container.renderToString(Together, { props: { units: 'cm', pieces: [{ name: 'Low Tide', piece }, { name: 'High Tide', piece }] } });
   const page = new JSDOM(html).window.document;
   const rows = [...page.querySelectorAll('dl > div')].map((row) => row.textContent.replaceAll(/\s+/g, ' ').trim());

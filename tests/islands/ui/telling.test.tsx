@@ -4,6 +4,7 @@ import { afterEach, beforeEach, describe, expect, it, vi } from 'vitest';
 import { Button } from '#islands/ui/Button.tsx';
 import { Dialog } from '#islands/ui/Dialog.tsx';
 import { Figures } from '#islands/ui/Figures.tsx';
+import { Findings } from '#islands/ui/Findings.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 import { Notice } from '#islands/ui/Notice.tsx';
 import { Throw } from '#islands/ui/Throw.tsx';
@@ -131,5 +132,20 @@ describe('what is told', () => {
     const { container } = render(<Figures items={[{ label: 'Width', value: [{ kind: 'number', text: '11' }, { kind: 'text', text: '\u2009' }, { kind: 'fraction', text: '3/4' }, { kind: 'text', text: '\u00a0' }, { kind: 'unit', text: 'in' }], was: 'pattern 15\u2009¾ in' }]} />);
     expect(container.querySelector('.frac')?.textContent).toBe('3/4');
     expect(screen.getByRole('definition').textContent).toContain('11\u20093/4\u00a0in');
+  });
+});
+
+describe('problems and warnings', () => {
+  it('stand as their sentences, and what a kind means stands once under those of that kind', () => {
+    render(<Findings found={[{ code: 'W_THICK', says: 'Wool is thick.' }, { code: 'W_SLIT', says: 'A slit.' }, { code: 'W_THICK', says: 'Rope is thick.' }, { says: 'Ask Ilse.' }]} />);
+    const [thick, slit, plain] = screen.getAllByRole('listitem').map((item) => item.textContent);
+    expect(thick).toMatch(/^Wool is thick\.Rope is thick\.Thick yarn for ends so close: what this means.*What to do: Take thinner yarn/);
+    expect(slit).toContain('A long slit: what this means');
+    expect(plain).toBe('Ask Ilse.');
+  });
+
+  it('a code nobody knows is told by its sentence alone', () => {
+    render(<Findings found={[{ code: 'constructor', says: 'Something.' }]} />);
+    expect(screen.getByRole('listitem').textContent).toBe('Something.');
   });
 });

@@ -13,6 +13,8 @@ export interface Found {
   readonly says: string;
   /** `reckoned`: the engine found it in what could be read. */
   readonly kind: Fault['kind'] | 'reckoned';
+  /** Of what the engine found. */
+  readonly code?: string;
 }
 
 export type Judgement =
@@ -37,7 +39,7 @@ export function judgeTyped(typed: TypedPiece): Judgement {
 }
 
 function placed(problems: readonly Problem[], typed: TypedPiece): Found[] {
-  return problems.map(({ path, message }) => ({ field: fieldOfPlace(path, typed), says: message, kind: 'reckoned' }));
+  return problems.map(({ path, message, code }) => ({ field: fieldOfPlace(path, typed), says: message, kind: 'reckoned', code }));
 }
 
 function onePerField(found: readonly Found[]): Found[] {
