@@ -27,7 +27,8 @@ export const following = {
   }),
 
   savePiece: formAction(MyPieceForm, async (input, ctx) => {
-    await saveMyPiece(ctx, input);
-    return { to: `/series/${input.series}/piece`, said: input.asPattern === undefined ? 'Your piece is kept. Every amount is reckoned for it.' : 'Your piece is as the pattern again.' };
+    const { isBegun } = await saveMyPiece(ctx, input);
+    const said = input.asPattern === undefined ? 'Your piece is kept.' : 'Your piece is as the pattern again.';
+    return { to: `/series/${input.series}/piece`, said: `${said} ${isBegun ? 'What is woven stays as it is; the rest is reckoned anew.' : 'Every amount is reckoned for it.'}` };
   }),
 };

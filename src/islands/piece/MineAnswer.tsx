@@ -3,6 +3,7 @@ import { amountOf, type Amount } from '#core/craft/amounts.ts';
 import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { wovenShare } from '#core/craft/rest/woven-share.ts';
 import { loomFigures } from '#core/series/figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
@@ -10,8 +11,10 @@ import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
 import { atOneScale, type MadeOnLoom } from '#islands/series/trial.ts';
 import { Figures, type Figure } from '#islands/ui/Figures.tsx';
+import { Findings } from '#islands/ui/Findings.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
+import { RestAnswer } from './RestAnswer.tsx';
 
 interface MineAnswerProps {
   name: string;
@@ -32,11 +35,13 @@ export function MineAnswer({ name, teacher, pattern, judged, units }: MineAnswer
       <div role="status">
         {judged.ok ? <Flag kind="on">It fits your loom</Flag> : <Flag kind="mend">{judged.problems.length === 1 ? 'One thing does not work yet' : `${judged.problems.length} things do not work yet`}</Flag>}
       </div>
-      <Looms {...{ name, teacher, pattern, made, units }} />
+      <Looms {...{ name, teacher, pattern, made, units }} woven={judged.ok && judged.halfway !== null ? wovenShare(judged.fitted, judged.halfway.woven) : undefined} />
+      {judged.ok && judged.halfway !== null && <RestAnswer made={judged.fitted} halfway={judged.halfway} units={units} />}
+      {judged.ok && judged.halfway !== null && <h2 className="h3">The whole piece</h2>}
       {made !== null && <Figures items={figuresOf(made, pattern, units)} />}
       {judged.ok
-        ? <Words says={[...judged.warnings.map(({ says }) => says), ...judged.fitted.changes]} />
-        : <ul className="small mine-words">{judged.problems.map(({ field, says }) => <li key={`${field} ${says}`}>{says}</li>)}</ul>}
+        ? <><Findings found={judged.warnings} /><Words says={judged.fitted.changes} /></>
+        : <Findings found={judged.problems} />}
       {made !== null && <Reckoned made={made} units={units} />}
     </div>
   );
@@ -46,12 +51,22 @@ function Words({ says }: { says: readonly string[] }) {
   return says.length === 0 ? null : <ul className="small mine-words">{says.map((sentence) => <li key={sentence}>{sentence}</li>)}</ul>;
 }
 
-function Looms({ name, teacher, pattern, made, units }: { name: string; teacher: string; pattern: MadeOnLoom; made: MadeOnLoom | null; units: Units }) {
+interface LoomsProps {
+  name: string;
+  teacher: string;
+  pattern: MadeOnLoom;
+  made: MadeOnLoom | null;
+  /** How far hers is woven, 0..1; all of it is drawn where she has not said. */
+  woven: number | undefined;
+  units: Units;
+}
+
+function Looms({ name, teacher, pattern, made, woven, units }: LoomsProps) {
   const cloths = useMemo(() => ({ pattern: clothPieceOf(pattern.piece, pattern.plan, name), mine: made === null ? null : clothPieceOf(made.piece, made.plan, name) }), [pattern, made, name]);
   const inside = cloths.mine?.loom?.insideWidthMm ?? cloths.pattern.loom?.insideWidthMm ?? cloths.pattern.widthMm;
   const { patternPx, loomPx } = atOneScale(cloths.pattern.widthMm, inside, ROOM_PX);
   const patternView = useMemo(() => ({ id: 'mine-pattern', as: 'hanging', width: patternPx, decorative: true } as const), [patternPx]);
-  const mineView = useMemo(() => ({ id: 'mine-own', as: 'loom', width: loomPx, units } as const), [loomPx, units]);
+  const mineView = useMemo(() => ({ id: 'mine-own', as: 'loom', width: loomPx, units, ...(woven === undefined ? {} : { woven }) } as const), [loomPx, units, woven]);
   return (
     <div className="trial-looms">
       <figure className="cloth"><Cloth piece={cloths.pattern} view={patternView} /><figcaption><b>{teacher}’s</b><br />{amountText(lengthOf(pattern.piece.size.widthMm, 'size'), units)} wide</figcaption></figure>

@@ -4,6 +4,7 @@
  */
 import { useDeferredValue, useEffect, useMemo, useReducer, useState } from 'react';
 import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
+import type { KeptPiece } from '#core/craft/my-piece/judge-woven.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
@@ -12,6 +13,7 @@ import { LoomFields } from './LoomFields.tsx';
 import { mineAfter } from './mine-after.ts';
 import { MineAnswer } from './MineAnswer.tsx';
 import { WayFields } from './WayFields.tsx';
+import { WovenFields } from './WovenFields.tsx';
 import { YarnFields } from './YarnFields.tsx';
 
 export interface MyPieceProps {
@@ -22,6 +24,8 @@ export interface MyPieceProps {
   readonly teacher: string;
   readonly pattern: FrameLoomPiece;
   readonly typed: TypedMine;
+  /** What was kept last: begun, it can no longer change. */
+  readonly kept: KeptPiece;
   /** Counts what was kept; sent back, so that two windows do not undo each other. */
   readonly revision: number;
   /** What the server said of the form as it was sent, by field. */
@@ -29,13 +33,14 @@ export interface MyPieceProps {
   readonly action: string;
 }
 
-export function MyPiece({ slug, name, teacher, pattern, typed: before, revision, errors, action }: MyPieceProps) {
+export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, revision, errors, action }: MyPieceProps) {
   const [typed, change] = useReducer(mineAfter, before);
   const [alive, setAlive] = useState(false);
   useEffect(() => setAlive(true), []);
   const settled = useDeferredValue(typed);
-  const judged = useMemo(() => judgeMine(settled, pattern), [settled, pattern]);
+  const judged = useMemo(() => judgeMine(settled, pattern, kept), [settled, pattern, kept]);
   const planned = useMemo(() => planPiece(pattern, settled.units), [pattern, settled.units]);
+  const woven = judged.fitted ?? null;
   const now = judged.ok ? {} : Object.fromEntries(judged.problems.map(({ field, says }) => [field, says]));
   const faults = alive ? now : errors;
   return (
@@ -46,6 +51,7 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, revision,
         <LoomFields {...{ typed, pattern, faults, change, alive }} />
         <WayFields typed={settled} chosen={typed} {...{ pattern, name, change, faults }} asPattern={planned.ok ? { piece: pattern, plan: planned.value } : null} />
         <YarnFields {...{ typed, pattern, faults, change, alive }} fitted={judged.ok ? judged.fitted : null} />
+        <WovenFields {...{ typed, faults, change }} piece={woven?.piece ?? pattern} plan={woven?.plan ?? null} />
         <div className="row">
           <Button type="submit" kind="act">Keep my piece</Button>
           <Button type="submit" kind="quiet" name="asPattern" value="yes">All as in the pattern</Button>

@@ -15,6 +15,7 @@ import { likelyHours } from '#core/series/hours-words.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
+import { Fold } from '#islands/ui/Fold.tsx';
 import { Wrong } from '#islands/ui/Wrong.tsx';
 import type { MineEvent } from './mine-after.ts';
 
@@ -47,7 +48,7 @@ const PICTURE_PX = 84;
 export function WayFields({ typed, chosen, pattern, asPattern, name, faults, change }: WayFieldsProps) {
   const { mine, ways } = useMemo(() => waysOf(typed, pattern), [typed, pattern]);
   const now = wayOf(chosen);
-  if (!isWorthChoosing(ways, mine) && now === 'as-it-is') return null;
+  if (!isWorthChoosing(ways, mine) && now === 'as-it-is' && faults[WAY_KEY] === undefined) return null;
   const own = ways[0]?.outcome;
   const room = own?.ok === true && asPattern !== null ? tellRoom(asPattern, own.value, typed.units) : [];
   const checked = ways.some(({ id }) => id === now) ? now : 'as-it-is';
@@ -138,8 +139,7 @@ function BandTicks({ chosen, pattern, change }: { chosen: TypedMine; pattern: Fr
   // From the end that was woven last, as the cloth stands on the loom.
   const bands = pattern.bands.map((band, index) => ({ band, index, field: names[index] ?? '' })).filter(({ band }) => band.technique !== 'hem-stitch').toReversed();
   return (
-    <details className="way-bands" open={wayOf(chosen) === 'leave-chosen' || undefined}>
-      <summary>Choose the bands to leave out</summary>
+    <Fold className="way-bands" needed={wayOf(chosen) === 'leave-chosen'} summary="Choose the bands to leave out">
       <div className="way-ticks">
         {bands.map(({ band, index, field }) => (
           <label key={field} className="check-row">
@@ -148,6 +148,6 @@ function BandTicks({ chosen, pattern, change }: { chosen: TypedMine; pattern: Fr
           </label>
         ))}
       </div>
-    </details>
+    </Fold>
   );
 }

@@ -8,6 +8,7 @@ import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import { Field, Select } from '#islands/ui/Field.tsx';
+import { Fold } from '#islands/ui/Fold.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
 import type { MineEvent } from './mine-after.ts';
@@ -57,12 +58,13 @@ function OwnYarn({ role, patternYarn, typed, fitted, faults, change, alive }: Om
   const typedColour = textOf(texts, 'colour');
   const colourNow = typedColour === '' ? (patternYarn.colour ?? '#d8d2c1') : typedColour;
   return (
-    <details className="own-yarn" open={wrong || undefined}>
-      <summary>
+    <Fold className="own-yarn" needed={wrong} summary={(
+      <>
         <YarnDot colour={own ? colourNow : patternYarn.colour} />
         <span><b>{label}</b><span className="small quiet">{own ? ` for ${patternYarn.label ?? role} (${role})` : ` (${role}), as in the pattern`}</span></span>
         {planned !== undefined && <span className="num"><Parts parts={formatAmount(lengthOf(planned.withMarginMm, 'yarn'), typed.units)} /></span>}
-      </summary>
+      </>
+    )}>
       <div className="two folds">
         <Select name={`yarns.${role}.by`} label="How thick, by" value={by} options={YARN_BY.map(({ text, label: words }) => ({ value: text, label: words }))} error={faultOf('by')} onChange={(event) => change({ kind: 'type-yarn', role, key: 'by', text: event.currentTarget.value })} />
         {(!alive || (own && by !== 'wraps')) && <Field {...fieldProps('grist')} label={own ? grist.label : 'That number'} hint={gristHints[by]} unit={grist.kind === 'number' ? grist.unit : undefined} inputMode={grist.kind === 'number' ? 'decimal' : 'text'} />}
@@ -75,6 +77,6 @@ function OwnYarn({ role, patternYarn, typed, fitted, faults, change, alive }: Om
           </>
         )}
       </div>
-    </details>
+    </Fold>
   );
 }

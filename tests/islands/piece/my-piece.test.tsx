@@ -10,7 +10,8 @@ import { lowTide } from '../../support/low-tide.ts';
 const pattern = await lowTide();
 /** The whole text at once: each change draws the cloth anew. */
 const type = (name: RegExp | string, text: string): void => { fireEvent.change(screen.getByRole('textbox', { name }), { target: { value: text } }); };
-const props: MyPieceProps = { slug: 'low-tide', name: 'Low Tide', teacher: 'Ilse', pattern, typed: typeMine({}, pattern, 'cm'), revision: 3, errors: {}, action: '?save' };
+const describing = (field: HTMLElement): string => (field.getAttribute('aria-describedby') ?? '').split(' ').map((id) => document.getElementById(id)?.textContent ?? '').join(' ');
+const props: MyPieceProps = { slug: 'low-tide', name: 'Low Tide', teacher: 'Ilse', pattern, typed: typeMine({}, pattern, 'cm'), kept: { mine: {}, woven: { bandsDone: 0 } }, revision: 3, errors: {}, action: '?save' };
 afterEach(cleanup);
 
 describe('my piece', () => {
@@ -27,8 +28,7 @@ describe('my piece', () => {
     const field = screen.getByRole('textbox', { name: 'Inside width' });
     type('Inside width', '3 mm');
     expect(field.getAttribute('aria-invalid')).toBe('true');
-    const described = (field.getAttribute('aria-describedby') ?? '').split(' ').map((id) => document.getElementById(id)?.textContent ?? '').join(' ');
-    expect(described).toContain('Too narrow for a frame.');
+    expect(describing(field)).toContain('Too narrow for a frame.');
     expect(screen.getByRole('status').textContent).toBe('One thing does not work yet');
   });
 
@@ -57,9 +57,48 @@ describe('my piece', () => {
     expect(markup).toContain('name="leaveOut.dunes"');
   });
 
+  test('half way it says what is still to weave, by the rows she measured, and whether her yarn suffices', async () => {
+    render(<MyPiece {...props} />);
+    expect(screen.queryByRole('heading', { name: 'Still to weave' })).toBeNull();
+    await userEvent.click(screen.getByText('I have already woven some of it'));
+    await userEvent.selectOptions(screen.getByRole('combobox', { name: 'Bands that are finished' }), '7 of 14, up to dunes');
+    type(/^Height of the cloth so far/, '26');
+    type(/\(water\)$/, '5');
+    expect(screen.getByRole('heading', { name: 'Still to weave' })).toBeDefined();
+    expect(screen.getByText('as you measured')).toBeDefined();
+    expect(screen.getByText('Not enough')).toBeDefined();
+    expect(screen.getByText(/of Fenwool 6\/2, .* with its margin, and .* are left\. That does not suffice/)).toBeDefined();
+  });
+
+  test('what is woven cannot change any more: the sentence stands at the field', () => {
+    const woven = { bandsDone: 6 };
+    render(<MyPiece {...props} typed={typeMine({}, pattern, 'cm', woven)} kept={{ mine: {}, woven }} />);
+    type('Width of your piece', '30');
+    const field = screen.getByRole('textbox', { name: 'Width of your piece' });
+    expect(describing(field)).toContain('The warp is on the loom, so the piece keeps its width and its 82 ends.');
+    expect(screen.getByRole('combobox', { name: 'Bands that are finished' })).toHaveProperty('value', '6');
+  });
+
+  test('what may still change half way is reckoned anew for the rest, and it says so', () => {
+    const woven = { bandsDone: 6 };
+    render(<MyPiece {...props} typed={typeMine({}, pattern, 'cm', woven)} kept={{ mine: {}, woven }} />);
+    expect(screen.queryByText(/Only the rest is reckoned anew/)).toBeNull();
+    fireEvent.change(screen.getByRole('textbox', { name: 'Inside height' }), { target: { value: '45' } });
+    fireEvent.click(screen.getByRole('radio', { name: /^Lower, from the end/ }));
+    expect(screen.getByText('What is woven stays as it is. Only the rest is reckoned anew.')).toBeDefined();
+    expect(screen.getAllByText(/before /).length).toBeGreaterThan(0);
+  });
+
+  test('a problem can be unfolded: what it means, what to do', () => {
+    render(<MyPiece {...props} />);
+    type('Inside width', '30');
+    expect(screen.getAllByText('It does not fit: what this means')).toHaveLength(1);
+    expect(screen.getByText(/^Make the one smaller or the other larger\./)).toBeDefined();
+  });
+
   test('her own yarn changes how much is needed', async () => {
     render(<MyPiece {...props} />);
-    await userEvent.click(screen.getByText(/\(water\)/));
+    await userEvent.click(screen.getByText(/\(water\), as in the pattern/));
     const way = screen.getAllByRole('combobox', { name: 'How thick, by' }).find((one) => one.getAttribute('name') === 'yarns.water.by');
     if (way === undefined) throw new Error('no way to say how thick');
     await userEvent.selectOptions(way, 'metresPer100g');
@@ -69,7 +108,7 @@ describe('my piece', () => {
 
   test('without script every field can be filled in, and what the server said stands at its field', () => {
     const markup = renderToString(<MyPiece {...props} errors={{ insideWidthMm: 'Too wide for a frame.' }} />);
-    for (const name of ['series', 'revision', 'shown', 'units', 'insideWidthMm', 'widthMm', 'yarns.shore.grist', 'yarns.ridge.strands']) expect(markup).toContain(`name="${name}"`);
+    for (const name of ['series', 'revision', 'shown', 'units', 'insideWidthMm', 'widthMm', 'yarns.shore.grist', 'yarns.ridge.strands', 'woven.bandsDone', 'woven.rows', 'woven.heightMm', 'woven.left.water']) expect(markup).toContain(`name="${name}"`);
     expect(markup).toContain('Too wide for a frame.');
     expect(markup).toContain('action="?save"');
     expect(markup).not.toContain(' style=');

@@ -51,6 +51,52 @@ describe('a student’s own piece', () => {
     expect((await MyPieceRow.findByPk(seat.id))?.data).toEqual({});
   });
 
+  test('half way is kept with what is woven, and told so; what is not woven is kept as nothing', async () => {
+    const { series, student, seat } = await buildFollowed();
+    const ctx = await contextFor(student);
+    expect(await saveMyPiece(ctx, form(series.slug, FITS))).toEqual({ revision: 1, isBegun: false });
+    expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ woven: null });
+    const woven = { 'woven.bandsDone': '6', 'woven.rows': '30', 'woven.heightMm': '13,5', 'woven.left.water': '60' };
+    expect(await saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven, revision: '1' }))).toEqual({ revision: 2, isBegun: true });
+    expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ woven: { bandsDone: 6, rows: 30, heightMm: 135, leftG: { water: 60 } } });
+  });
+
+  test('half way is refused what can no longer change, at the field, and keeps what was kept', async () => {
+    const { series, student, seat } = await buildFollowed();
+    const ctx = await contextFor(student);
+    const woven = { 'woven.bandsDone': '6' };
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven }));
+    const refused = (fields: Record<string, string>) => expect(saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven, revision: '1', ...fields }))).rejects;
+    await refused({ widthMm: '25' }).toMatchObject({ code: 'VALIDATION', fields: { widthMm: expect.stringContaining('the piece keeps its width') } });
+    await refused({ endsTogether: '1' }).toMatchObject({ fields: { endsTogether: expect.stringContaining('The cloth is begun') } });
+    await refused({ nailPitchMm: '10' }).toMatchObject({ fields: { nailPitchMm: expect.stringContaining('stay as far apart as they are') } });
+    await refused({ asPattern: 'yes' }).toMatchObject({ code: 'VALIDATION' });
+    expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ revision: 1, data: { widthMm: 300 }, woven: { bandsDone: 6 } });
+  });
+
+  test('half way may still change its yarns; and everything, once nothing of it is woven any more', async () => {
+    const { series, student, seat } = await buildFollowed();
+    const ctx = await contextFor(student);
+    const woven = { 'woven.bandsDone': '6' };
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven }));
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven, revision: '1', 'yarns.ridge.by': 'tex', 'yarns.ridge.grist': '330' }));
+    expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ data: { yarns: { ridge: { tex: 330 } } }, woven: { bandsDone: 6 } });
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, widthMm: '25', 'woven.bandsDone': '0', revision: '2' }));
+    expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ data: { widthMm: 250 }, woven: null });
+  });
+
+  test.each([
+    ['woven.bandsDone', { 'woven.bandsDone': '99' }, 'This piece has'],
+    ['woven.rows', { 'woven.bandsDone': '6', 'woven.rows': 'some' }, 'is no number'],
+    ['woven.rows', { 'woven.rows': '2' }, 'no rows to count'],
+    ['woven.heightMm', { 'woven.heightMm': '12' }, 'Say above how far you are'],
+    ['woven.heightMm', { 'woven.bandsDone': '7', 'woven.heightMm': '2' }, 'measure'],
+    ['woven.left.water', { 'woven.left.water': '-3' }, 'below 0'],
+  ])('of what is woven, %s %o is refused at its field', async (field, fields, says) => {
+    const { series, student } = await buildFollowed();
+    await expect(saveMyPiece(await contextFor(student), form(series.slug, { ...FITS, ...fields }))).rejects.toMatchObject({ code: 'VALIDATION', fields: { [field]: expect.stringContaining(says) } });
+  });
+
   test('is refused to a visitor, without a seat, and where there is no pattern', async () => {
     const { series, student } = await buildFollowed();
     await expect(saveMyPiece(contextOf(null), form(series.slug, FITS))).rejects.toMatchObject({ code: 'UNAUTHENTICATED' });

@@ -12,25 +12,36 @@ import type { Outcome, Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, type AskedLength } from './asked-of-mine.ts';
+import { isTold, judgeWoven, NOTHING_KEPT, wovenFieldOf, type Halfway, type KeptPiece } from './judge-woven.ts';
 import { isOwnYarn, leftOutBy, wayOf, yarnOf, type TypedMine } from './typed-mine.ts';
+import { readTypedWoven } from './typed-woven.ts';
 
 export interface MineFound {
   /** Name of the field it is about; '' for what belongs to no single one. */
   readonly field: string;
   readonly says: string;
+  /** Of what the engine found. */
+  readonly code?: string;
 }
 
 export type MineJudgement =
-  | { readonly ok: true; readonly mine: MyPiece; readonly fitted: FittedPiece<FrameLoomPiece>; readonly warnings: readonly MineFound[] }
-  | { readonly ok: false; readonly problems: readonly MineFound[] };
+  /** `halfway` is null while nothing is said of what is woven. */
+  | { readonly ok: true; readonly mine: MyPiece; readonly fitted: FittedPiece<FrameLoomPiece>; readonly warnings: readonly MineFound[]; readonly halfway: Halfway | null }
+  /** `fitted` is there where only the rest of it stands in the way, or a field that cannot be read. */
+  | { readonly ok: false; readonly problems: readonly MineFound[]; readonly fitted?: FittedPiece<FrameLoomPiece> };
 
-export function judgeMine(typed: TypedMine, pattern: FrameLoomPiece): MineJudgement {
+/** `kept` is her piece before: begun, it stays on the loom as it is. */
+export function judgeMine(typed: TypedMine, pattern: FrameLoomPiece, kept: KeptPiece = NOTHING_KEPT): MineJudgement {
   const faults = new Map<string, string>();
   const { mine, outcome: fitted } = inHerWay(typed, pattern, readMine(typed, pattern, faults));
-  if (fitted.ok && faults.size === 0) return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern) };
+  const woven = readTypedWoven(typed, faults);
+  const halfway = !fitted.ok ? fitted : isTold(woven) ? judgeWoven(woven, mine, fitted.value, kept, pattern, typed.units) : null;
+  if (fitted.ok && halfway?.ok !== false && faults.size === 0) {
+    return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern), halfway: halfway?.value ?? null };
+  }
   const own = [...faults].map(([field, says]): MineFound => ({ field, says }));
-  const engine = fitted.ok ? [] : placed(fitted.problems, pattern).filter(({ field }) => !faults.has(field));
-  return { ok: false, problems: [...own, ...onePerField(engine)] };
+  const engine = halfway?.ok === false ? placed(halfway.problems, pattern).filter(({ field }) => !faults.has(field)) : [];
+  return { ok: false, problems: [...own, ...onePerField(engine)], ...(fitted.ok ? { fitted: fitted.value } : {}) };
 }
 
 /** What she typed of her piece without the way of fitting it, and every way there is. */
@@ -132,7 +143,7 @@ const FIELD_OF: Readonly<Record<string, string>> = {
 };
 
 function fieldOf(path: string, pattern: FrameLoomPiece): string {
-  const known = FIELD_OF[path];
+  const known = FIELD_OF[path] ?? wovenFieldOf(path);
   if (known !== undefined) return known;
   const [, first, role, key] = path.split('/');
   if (first === 'warp' && (role === 'endsTogether' || role === 'parity' || role === 'endCount')) return ENDS.key;
@@ -140,7 +151,8 @@ function fieldOf(path: string, pattern: FrameLoomPiece): string {
   return `yarns.${role}.${key !== undefined && ['strands', 'wrapsPerInch', 'colour', 'label'].includes(key) ? key : 'grist'}`;
 }
 
-function placed(problems: readonly Problem[], pattern: FrameLoomPiece): MineFound[] {
+/** With the names of their fields, each sentence once a field. */
+export function placed(problems: readonly Problem[], pattern: FrameLoomPiece): MineFound[] {
   const once = [...new Map(problems.map((problem) => [`${fieldOf(problem.path, pattern)} ${problem.message}`, problem])).values()];
-  return once.map(({ path, message }) => ({ field: fieldOf(path, pattern), says: message }));
+  return once.map(({ path, message, code }) => ({ field: fieldOf(path, pattern), says: message, code }));
 }

@@ -10,10 +10,12 @@ import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { DEFAULT_KIND } from '#core/craft/looms/looms.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { gristTexts } from '#core/craft/piece-form/type-piece.ts';
+import { NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
 import { AS_PATTERN, CHOICES, ENDS, LEAVE_OUT, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+import { typeWoven, wovenAsked, wovenTexts } from './typed-woven.ts';
 
 export interface TypedMine {
   /** Those of lengths that name no unit themselves. */
@@ -53,7 +55,7 @@ function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
 }
 
 /** What she kept, in the words and units of her form. */
-export function typeMine(mine: MyPiece, pattern: FrameLoomPiece, units: Units): TypedMine {
+export function typeMine(mine: MyPiece, pattern: FrameLoomPiece, units: Units, woven: WovenSoFar = NOTHING_WOVEN): TypedMine {
   const kept: Readonly<Record<string, unknown>> = { ...mine.loom, widthMm: mine.widthMm };
   return {
     units,
@@ -65,6 +67,7 @@ export function typeMine(mine: MyPiece, pattern: FrameLoomPiece, units: Units): 
       warping: fieldText(mine.loom?.warping ?? pattern.loom.warping, WARPING, units),
       endsTogether: fieldText(mine.endsTogether ?? pattern.warp.endsTogether ?? 1, ENDS, units),
       ...wayTexts(mine),
+      ...typeWoven(woven, pattern, units),
     },
     yarns: Object.fromEntries(Object.entries(pattern.yarns).map(([role, yarn]) => [role, yarnTexts(mine.yarns?.[role], yarn, units)])),
   };
@@ -77,17 +80,18 @@ export function mineOfFields(ask: (name: string) => string | undefined, pattern:
   const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
-    texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), WAY_KEY, ...leaveOutNames(pattern)].map((key) => [key, text(key)])),
+    texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), WAY_KEY, ...leaveOutNames(pattern), ...wovenAsked(pattern).map(({ key }) => key)].map((key) => [key, text(key)])),
     yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, Object.fromEntries(YARN_KEYS.map((key) => [key, text(`yarns.${role}.${key}`)]))])),
   };
   // Without script she chooses other units and sends the form in one go; what she typed belongs to what she saw.
   return inOtherUnits(typed, ask('units') === 'in' ? 'in' : 'cm');
 }
 
-/** The same lengths typed in other units; what cannot be read stays as it was typed. */
+/** The same measures typed in other units; what cannot be read stays as it was typed. */
 export function inOtherUnits(typed: TypedMine, units: Units): TypedMine {
   if (typed.units === units) return typed;
-  const texts = Object.fromEntries(LENGTHS.map((asked) => {
+  const measures = [...LENGTHS, ...wovenAsked(typed)];
+  const texts = Object.fromEntries(measures.map((asked) => {
     const text = textOf(typed.texts, asked.key);
     const read = text.trim() === '' ? null : readText(text, asked, typed.units);
     return [asked.key, read?.ok === true ? fieldText(read.value, asked, units) : text];
@@ -109,7 +113,8 @@ export function withTriedLoom(typed: TypedMine, loom: TypedLoom, pattern: FrameL
   return { ...inOtherUnits(typed, loom.units), texts: { ...inOtherUnits(typed, loom.units).texts, ...texts } };
 }
 
-/** Everything as the pattern has it. */
+/** Everything as the pattern has it; what is woven stays woven. */
 export function asPattern(typed: TypedMine, pattern: FrameLoomPiece): TypedMine {
-  return typeMine({}, pattern, typed.units);
+  const { texts, ...plain } = typeMine({}, pattern, typed.units);
+  return { ...plain, texts: { ...texts, ...wovenTexts(typed) } };
 }

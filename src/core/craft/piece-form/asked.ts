@@ -28,12 +28,12 @@ interface AskedWords {
 
 /**
  * `length` is typed in cm or in, `fine` in mm or in, `yarn` in m or yd, and all are millimetres in the piece. A `lean`
- * is a length that may be below 0. `points` are pairs of such lengths, `0 : 0; 12 : 0; 6 : 9`, across and up. A `share` is typed in per cent and is a fraction in the piece. A `role` is chosen
+ * is a length that may be below 0. A `mass` is typed in g or oz and is grams. `points` are pairs of such lengths, `0 : 0; 12 : 0; 6 : 9`, across and up. A `share` is typed in per cent and is a fraction in the piece. A `role` is chosen
  * among the yarns of the form.
  */
 export type Asked = AskedWords &
   (
-    | { readonly kind: 'length' | 'fine' | 'yarn' | 'lean' | 'points' | 'share' | 'role' }
+    | { readonly kind: 'length' | 'fine' | 'yarn' | 'lean' | 'mass' | 'points' | 'share' | 'role' }
     | { readonly kind: 'number'; readonly unit?: string }
     | { readonly kind: 'text'; readonly maxLength: number }
     /** The first option counts where nothing is chosen, unless `needed`. */

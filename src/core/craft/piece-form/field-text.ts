@@ -5,6 +5,7 @@
 import type { ShapePoint } from '#core/craft/piece.ts';
 import { MM_PER_INCH, inchesText, toInches } from '#core/units/inches.ts';
 import { parseLength, type LengthUnit } from '#core/units/parse-length.ts';
+import { GRAMS_PER_OUNCE, parseMass } from '#core/units/parse-mass.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Asked } from './asked.ts';
 
@@ -20,6 +21,8 @@ const UNIT_OF: Readonly<Record<LengthKind, Readonly<Record<Units, LengthUnit>>>>
   yarn: { cm: 'm', in: 'yd' },
 };
 
+const MASS_UNIT_OF = { cm: 'g', in: 'oz' } as const satisfies Readonly<Record<Units, string>>;
+
 /** The unit that stands in the field's box; undefined for words. */
 export function fieldUnit(asked: Asked, units: Units): string | undefined {
   switch (asked.kind) {
@@ -28,6 +31,8 @@ export function fieldUnit(asked: Asked, units: Units): string | undefined {
     case 'fine':
     case 'yarn':
       return UNIT_OF[asked.kind][units];
+    case 'mass':
+      return MASS_UNIT_OF[units];
     case 'points':
       return UNIT_OF.lean[units];
     case 'share':
@@ -56,6 +61,14 @@ function lengthFieldText(mm: number, unit: LengthUnit): string {
 /** A length that may be below 0. */
 const leanText = (mm: number, units: Units): string => `${mm < 0 ? '−' : ''}${lengthFieldText(Math.abs(mm), UNIT_OF.lean[units])}`;
 
+/** As short as it can be said exactly: ounces that do not come out even are written as grams. */
+function massText(grams: number, units: Units): string {
+  if (units === 'cm') return String(grams);
+  const ounces = decimalText(grams / GRAMS_PER_OUNCE);
+  const read = parseMass(ounces, 'oz');
+  return read.ok && read.grams === grams ? ounces : `${String(grams)} g`;
+}
+
 /** Without the tail of nines or noughts that a division leaves. */
 const decimalText = (value: number): string => String(Number(value.toPrecision(12)));
 
@@ -83,6 +96,8 @@ export function fieldText(value: unknown, asked: Asked, units: Units): string {
       return lengthFieldText(value, UNIT_OF[asked.kind][units]);
     case 'lean':
       return leanText(value, units);
+    case 'mass':
+      return massText(value, units);
     case 'share':
       return shiftPoint(String(value), 2);
     default:
@@ -112,6 +127,11 @@ function readLength(text: string, kind: LengthKind, units: Units): { readonly ok
   return { ok: true, value: below && read.mm !== 0 ? -read.mm : read.mm };
 }
 
+function readMass(text: string, units: Units): ReadText {
+  const read = parseMass(text, MASS_UNIT_OF[units]);
+  return read.ok ? { ok: true, value: read.grams } : no(read.reason);
+}
+
 function readPoints(text: string, units: Units): ReadText {
   const points: ShapePoint[] = [];
   for (const pair of text.split(';').map((part) => part.trim()).filter((part) => part !== '')) {
@@ -134,6 +154,8 @@ export function readText(typed: string, asked: Asked, units: Units): ReadText {
     case 'yarn':
     case 'lean':
       return readLength(text, asked.kind, units);
+    case 'mass':
+      return readMass(text, units);
     case 'points':
       return readPoints(text, units);
     case 'share':
@@ -161,6 +183,8 @@ export function missingSays(asked: Asked, units: Units): string {
     case 'yarn':
     case 'lean':
       return `${name} is missing. Type it in ${UNIT_OF[asked.kind][units]}.`;
+    case 'mass':
+      return `${name} is missing. Type it in ${MASS_UNIT_OF[units]}.`;
     case 'role':
       return `${name} is missing. Choose one of your yarns.`;
     case 'choice':

@@ -14,6 +14,8 @@ export interface WovenSoFar {
   readonly leftG?: Readonly<Record<string, number>>;
 }
 
+export const NOTHING_WOVEN: WovenSoFar = { bandsDone: 0 };
+
 const MOST_ROWS = 20_000;
 const MOST_GRAMS = 100_000;
 

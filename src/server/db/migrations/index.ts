@@ -8,6 +8,7 @@ import { createSeats } from './0005-create-seats.ts';
 import { createProgress } from './0006-create-progress.ts';
 import { createQueues } from './0007-create-queues.ts';
 import { createVideos } from './0008-create-videos.ts';
+import { addWovenSoFar } from './0009-add-woven-so-far.ts';
 import { createOpenings } from './0010-create-openings.ts';
 
 export const migrations: readonly Migration[] = [
@@ -19,5 +20,6 @@ export const migrations: readonly Migration[] = [
   createProgress,
   createQueues,
   createVideos,
+  addWovenSoFar,
   createOpenings,
 ];

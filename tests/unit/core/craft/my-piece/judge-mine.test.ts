@@ -130,3 +130,41 @@ describe('a loom of another size', () => {
     expect(judged.ok && judged.fitted.plan.loom.insideWidthNeededMm).toBeLessThanOrEqual(280);
   });
 });
+
+describe('a piece that is half woven', () => {
+  const WOVEN = { 'woven.bandsDone': '7' };
+  const rest = (fields: Fields) => {
+    const judged = judge(fields);
+    if (!judged.ok || judged.halfway === null) throw new Error('no rest was reckoned');
+    return judged.halfway;
+  };
+
+  test('says nothing of a rest while nothing is said of what is woven', () => {
+    expect(judge({ 'woven.bandsDone': '0' })).toMatchObject({ ok: true, halfway: null });
+  });
+
+  test('the rest has fewer rows with every row that is woven', () => {
+    expect(rest({ ...WOVEN, 'woven.rows': '0' }).rest.rows - rest({ 'woven.bandsDone': '6', 'woven.rows': '40' }).rest.rows).toBeLessThan(0);
+  });
+
+  test('what she measured counts for more than the plan', () => {
+    expect(rest(WOVEN).rest.trust).toBe('formula');
+    const measured = rest({ ...WOVEN, 'woven.heightMm': '30' }).rest;
+    expect(measured.trust).toBe('measured');
+    expect(measured.picksPerCm).toBeLessThan(rest(WOVEN).rest.picksPerCm);
+  });
+
+  test('ounces and inches come out as grams and millimetres, and go back into the form as they were typed', () => {
+    const fields = { ...WOVEN, 'woven.heightMm': '11 1/2', 'woven.left.water': '1.5', units: 'in', shown: 'in' };
+    const { woven } = rest(fields);
+    expect(woven.heightMm).toBeCloseTo(292.1, 6);
+    expect(woven.leftG?.['water']).toBeCloseTo(42.524, 3);
+    expect(typeMine({}, pattern, 'in', woven).texts).toMatchObject({ 'woven.heightMm': '11 1/2', 'woven.left.water': '1.5' });
+    const inCm = inOtherUnits(typed(fields), 'cm');
+    expect(inCm.texts['woven.heightMm']).toBe('11 1/2 in');
+  });
+
+  test('yarn that was weighed is judged even before the first row', () => {
+    expect(rest({ 'woven.left.water': '1' }).warnings).toMatchObject([{ code: 'W_SHORT', path: '/leftG/water' }]);
+  });
+});
