@@ -4,7 +4,6 @@
  */
 import type { Reckoned } from '#core/craft/amounts/amount-types.ts';
 import type { ClothPiece } from '#core/craft/cloth/cloth-piece.ts';
-import type { Figure } from '#core/craft/figures/figure.ts';
 import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import type { Hours } from '#core/craft/plan-types.ts';
@@ -82,7 +81,7 @@ export interface CraftWords {
  * Methods, so that a craft of one piece and plan stands where any craft is asked for. Every one may be handed only a
  * piece of its own craft, with the plan of that very piece: `craftOf` and `planPiece` see to it.
  */
-export interface Craft<P extends PieceCore = PieceCore, L extends PlanCore = PlanCore, F extends string = string> {
+export interface Craft<P extends PieceCore = PieceCore, L extends PlanCore = PlanCore> {
   readonly words: CraftWords;
   /** Shown wherever the craft is taught, before anybody begins. */
   readonly cautions: readonly Caution[];
@@ -111,5 +110,4 @@ export interface Craft<P extends PieceCore = PieceCore, L extends PlanCore = Pla
   size(made: MadeOf<P, L>, units: Units): string;
   /** Inside width of the narrowest frame it needs; undefined where none is needed. */
   leastInsideMm(made: MadeOf<P, L>): number | undefined;
-  readonly figures: Readonly<Record<F, Figure<P, L>>>;
 }

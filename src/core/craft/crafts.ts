@@ -1,4 +1,7 @@
-/** Every craft a piece can be made in. A further one is a further line here and its folder beside this file. */
+/**
+ * Every craft a piece can be made in. A further one is a further line here and in `planners.ts`, and its folder beside
+ * this file; its figures, if any have been drawn, are a line in `figures/figure-kinds.ts`.
+ */
 import type { Craft, MadeOf } from '#core/craft/craft.ts';
 import { DYEING } from '#core/craft/dyeing/craft.ts';
 import { FRAME_LOOM } from '#core/craft/frame-loom/craft.ts';
@@ -17,8 +20,8 @@ export type CraftName = keyof typeof CRAFTS;
 export const CRAFT_NAMES = Object.keys(CRAFTS) as [CraftName, ...CraftName[]];
 
 /** The piece of one craft, and its plan. */
-export type PieceIn<N extends CraftName> = (typeof CRAFTS)[N] extends Craft<infer P, infer _L, infer _F> ? P : never;
-export type PlanIn<N extends CraftName> = (typeof CRAFTS)[N] extends Craft<infer _P, infer L, infer _F> ? L : never;
+export type PieceIn<N extends CraftName> = (typeof CRAFTS)[N] extends Craft<infer P, infer _L> ? P : never;
+export type PlanIn<N extends CraftName> = (typeof CRAFTS)[N] extends Craft<infer _P, infer L> ? L : never;
 
 /** A piece of any craft; its `craft` tells which. */
 export type Piece = { [N in CraftName]: PieceIn<N> }[CraftName];

@@ -14,7 +14,7 @@ type Made = MadeOf<DyePiece, DyePlan>;
 const materials = ({ plan }: Made): Material[] => plan.steps.flatMap(({ agents }) => agents.map(({ agent, massG }) => ({ key: `agent.${agent}`, name: AGENT_WORDS[agent], grams: massG })));
 const fibre = ({ piece }: Made, units: Units): string => `${amountText(massOf(piece.fibre.massG), units)} of ${piece.fibre.label ?? piece.fibre.kind.replace('other-', '')}`;
 
-export const DYEING: Craft<DyePiece, DyePlan, never> = {
+export const DYEING: Craft<DyePiece, DyePlan> = {
   words: {
     label: 'Natural dyeing', hours: 'at the pots', needs: 'No loom, pots that never touch food', material: 'To weigh', allMaterial: 'All of it together', made: 'dyed', search: 'natural dyeing dye plants mordant',
   },
@@ -33,5 +33,4 @@ export const DYEING: Craft<DyePiece, DyePlan, never> = {
   summary: (made, units) => `${fibre(made, units)}, ${String(made.plan.steps.length)} baths`,
   size: fibre,
   leastInsideMm: () => undefined,
-  figures: {},
 };

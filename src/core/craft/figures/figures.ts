@@ -1,18 +1,26 @@
 /** Every figure, with a piece that fills it. */
-import { CRAFT_NAMES, CRAFTS, craftOf, type CraftName, type Piece, type Plan } from '#core/craft/crafts.ts';
+import { CRAFTS, type Piece, type Plan } from '#core/craft/crafts.ts';
 import type { Figure, FigureInput, FigureStep } from '#core/craft/figures/figure.ts';
-import type { FigureKind } from '#core/craft/figures/figure-kinds.ts';
+import { FIGURES, type FigureCraft, type FigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { planPiece } from '#core/craft/plan.ts';
 
 /** What any figure may be asked with: a figure of another craft than the piece's shows that craft's example. */
 export type AnyFigureInput = FigureInput<Piece, Plan>;
 
-const craftWith = (kind: FigureKind): CraftName => CRAFT_NAMES.find((name) => Object.hasOwn(CRAFTS[name].figures, kind)) ?? 'frame-loom';
+interface Drawn {
+  readonly craft: FigureCraft;
+  readonly figure: Figure<Piece, Plan>;
+}
 
-const examples = new Map<CraftName, AnyFigureInput>();
+const drawn = <K extends string>(craft: FigureCraft, figures: Readonly<Record<K, Figure<Piece, Plan>>>): [string, Drawn][] =>
+  Object.entries<Figure<Piece, Plan>>(figures).map(([kind, figure]) => [kind, { craft, figure }]);
+
+const DRAWN = Object.fromEntries([...drawn('frame-loom', FIGURES['frame-loom']), ...drawn('macrame', FIGURES.macrame)]) as Readonly<Record<FigureKind, Drawn>>;
+
+const examples = new Map<FigureCraft, AnyFigureInput>();
 
 /** Reckoned once: it never changes. */
-function exampleOf(craft: CraftName, input: AnyFigureInput): AnyFigureInput {
+function exampleOf(craft: FigureCraft, input: AnyFigureInput): AnyFigureInput {
   const known = examples.get(craft);
   if (known !== undefined) return { ...known, units: input.units };
   const piece = CRAFTS[craft].example;
@@ -25,9 +33,7 @@ function exampleOf(craft: CraftName, input: AnyFigureInput): AnyFigureInput {
 
 /** The figure of this name, and what it is drawn from. */
 export function figureOf(kind: FigureKind, input: AnyFigureInput): { readonly figure: Figure<Piece, Plan>; readonly input: AnyFigureInput } {
-  const craft = craftWith(kind);
-  const figure = craftOf({ craft }).figures[kind];
-  if (figure === undefined) throw new RangeError(`no figure is called ${kind}`);
+  const { craft, figure } = DRAWN[kind];
   return { figure, input: input.piece.craft === craft ? input : exampleOf(craft, input) };
 }
 

@@ -6,7 +6,6 @@ import { changePiece } from '#core/craft/fitting/change-piece.ts';
 import { tellChanges } from '#core/craft/fitting/tell-changes.ts';
 import { AMOUNTS, amountIn } from '#core/craft/frame-loom/amounts.ts';
 import { EXAMPLE } from '#core/craft/frame-loom/example.ts';
-import { FIGURES } from '#core/craft/frame-loom/figures.ts';
 import { planFrameLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
 import { readPieceParts } from '#core/craft/frame-loom/read-piece.ts';
 import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
@@ -50,7 +49,7 @@ function summary({ piece, plan }: Made, units: Units): string {
   return `${inside}${nails}, ${piece.warp.endsTogether === 2 ? 'doubled' : 'single'} ends: ${plan.ends.count} ends, woven ${size(piece.size.widthMm, units)} wide`;
 }
 
-export const FRAME_LOOM: Craft<FrameLoomPiece, FrameLoomPlan, keyof typeof FIGURES> = {
+export const FRAME_LOOM: Craft<FrameLoomPiece, FrameLoomPlan> = {
   words: {
     label: 'Weaving',
     hours: 'at the loom',
@@ -81,5 +80,4 @@ export const FRAME_LOOM: Craft<FrameLoomPiece, FrameLoomPlan, keyof typeof FIGUR
   summary,
   size: ({ piece: { size: { widthMm, heightMm } } }, units) => `${size(widthMm, units)} wide and ${size(heightMm, units)} high, without its fringe`,
   leastInsideMm: ({ plan }) => plan.loom.insideWidthNeededMm,
-  figures: FIGURES,
 };

@@ -5,7 +5,6 @@ import { AMOUNTS, amountIn } from '#core/craft/macrame/amounts.ts';
 import { CORD_CAUTIONS } from '#core/craft/macrame/cautions.ts';
 import { drawMacrame } from '#core/craft/macrame/draw.ts';
 import { EXAMPLE } from '#core/craft/macrame/example.ts';
-import { FIGURES } from '#core/craft/macrame/figures.ts';
 import type { Cord, MacramePiece, MacramePlan } from '#core/craft/macrame/piece.ts';
 import { planMacrame } from '#core/craft/macrame/plan-macrame.ts';
 import { readPiece } from '#core/craft/macrame/read-piece.ts';
@@ -41,7 +40,7 @@ function tellChanges(before: Made, after: Made, units: Units): string[] {
   return [...yarns, ...longer];
 }
 
-export const MACRAME: Craft<MacramePiece, MacramePlan, keyof typeof FIGURES> = {
+export const MACRAME: Craft<MacramePiece, MacramePlan> = {
   words: {
     label: 'Macramé',
     hours: 'of knotting',
@@ -70,5 +69,4 @@ export const MACRAME: Craft<MacramePiece, MacramePlan, keyof typeof FIGURES> = {
   summary: ({ piece, plan }, units) => `${String(plan.cords)} cords on a ${piece.rod.kind}, ${size(plan.heightMm, units)} long`,
   size: ({ plan }, units) => `${size(plan.heightMm, units)} long, about ${size(plan.widthMm, units)} wide where it is knotted`,
   leastInsideMm: () => undefined,
-  figures: FIGURES,
 };

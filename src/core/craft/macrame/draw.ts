@@ -47,13 +47,21 @@ class Drawing {
 interface End {
   x: number;
   y: number;
+  /** Where it hangs when nothing draws it aside. */
+  readonly home: number;
 }
 
 interface Bundle {
   readonly cord: Yarned;
-  readonly ends: End[];
-  /** Where each end hangs when nothing draws it aside. */
-  readonly homes: readonly number[];
+  readonly ends: readonly End[];
+}
+
+/** What stands at the same place in both. */
+function pairsOf<A, B>(ones: readonly A[], others: readonly B[]): [A, B][] {
+  return ones.flatMap((one, index): [A, B][] => {
+    const other = others[index];
+    return other === undefined ? [] : [[one, other]];
+  });
 }
 
 function lead(drawing: Drawing, { colour, dMm }: Yarned, end: End, x: number, y: number): void {
@@ -66,12 +74,11 @@ function lead(drawing: Drawing, { colour, dMm }: Yarned, end: End, x: number, y:
 }
 
 /** Four ends from `first` on, knotted together at their middle. */
-function knotGroup(drawing: Drawing, { cord, ends, homes }: Bundle, first: number, y: number, high: number, spiral: boolean): void {
+function knotGroup(drawing: Drawing, { cord, ends }: Bundle, first: number, y: number, high: number, spiral: boolean): void {
   const group = ends.slice(first, first + 4);
-  const middle = ((homes[first] ?? 0) + (homes[first + 3] ?? 0)) / 2;
-  const places = [-1.5, -0.5, 0.5, 1.5];
+  const middle = group.reduce((sum, { home }) => sum + home, 0) / group.length;
   group.forEach((end, index) => {
-    lead(drawing, cord, end, middle + (places[index] ?? 0) * cord.dMm, y);
+    lead(drawing, cord, end, middle + (index - 1.5) * cord.dMm, y);
     end.y = y + high;
   });
   drawing.place(`square ${cord.colour} ${String(cord.dMm)} ${high.toFixed(2)} ${String(spiral)}`, () => squareKnot(cord, high, spiral), middle, y);
@@ -80,8 +87,8 @@ function knotGroup(drawing: Drawing, { cord, ends, homes }: Bundle, first: numbe
 function drawSquareKnots(drawing: Drawing, bundle: Bundle, section: Extract<Section, { technique: 'square-knots' }>, plan: SectionPlan, top: number): void {
   const each = (plan.knots ?? 0) / (bundle.ends.length / 4);
   const shown = Math.max(1, Math.round(each / drawing.knotsTogether));
-  const gap = each > 1 ? ((section.gapMm ?? 0) * (each - 1)) / Math.max(1, shown - 1) : 0;
-  const high = shown > 1 ? (plan.heightMm - gap * (shown - 1)) / shown : plan.heightMm;
+  const gap = ((section.gapMm ?? 0) * (each - 1)) / Math.max(1, shown - 1);
+  const high = (plan.heightMm - gap * (shown - 1)) / shown;
   for (let first = 0; first + 3 < bundle.ends.length; first += 4) {
     for (let knot = 0; knot < shown; knot++) knotGroup(drawing, bundle, first, top + knot * (high + gap), high, section.spiral === true);
   }
@@ -96,16 +103,17 @@ function drawAlternating(drawing: Drawing, bundle: Bundle, section: Extract<Sect
   }
 }
 
-function drawHalfHitches(drawing: Drawing, { cord, ends, homes }: Bundle, section: Extract<Section, { technique: 'half-hitches' }>, plan: SectionPlan, top: number): void {
+function drawHalfHitches(drawing: Drawing, { cord, ends }: Bundle, section: Extract<Section, { technique: 'half-hitches' }>, plan: SectionPlan, top: number): void {
   const slant = section.slant ?? 'level';
   const shown = Math.min(section.rows, MOST_ROWS);
   const step = HITCH_ROW * cord.dMm;
   const fall = slant === 'level' ? 0 : Math.max(0, plan.heightMm - section.rows * step);
-  const [left = 0, right = 0] = [homes[0], homes.at(-1)];
-  const share = (x: number): number => (right === left ? 0 : slant === 'right' ? (x - left) / (right - left) : (right - x) / (right - left));
+  const homes = ends.map(({ home }) => home);
+  const [left, right] = [Math.min(...homes), Math.max(...homes)];
+  const share = (x: number): number => (slant === 'right' ? (x - left) / (right - left) : (right - x) / (right - left));
   for (let row = 0; row < shown; row++) {
     const yAt = (x: number): number => top + row * step + fall * share(x);
-    ends.forEach((end, index) => lead(drawing, cord, end, homes[index] ?? 0, yAt(homes[index] ?? 0)));
+    for (const end of ends) lead(drawing, cord, end, end.home, yAt(end.home));
     const middle = (yAt(left) + yAt(right)) / 2 + cord.dMm;
     drawing.laid.push({ colour: cord.colour, widthMm: cord.dMm, way: [left - cord.dMm, yAt(left) + cord.dMm, (left + right) / 2, middle, (left + right) / 2, middle, right + cord.dMm, yAt(right) + cord.dMm] });
     ends.forEach((end) => {
@@ -153,7 +161,15 @@ function drawSection(drawing: Drawing, bundle: Bundle, section: Section, plan: S
       break;
     case 'plain':
       // Where nothing follows, the ends hang straight; else they are led to their next place when it is known.
-      bundle.ends.forEach((end, index) => lead(drawing, bundle.cord, end, bundle.homes[index] ?? end.x, top + plan.heightMm));
+      for (const end of bundle.ends) lead(drawing, bundle.cord, end, end.home, top + plan.heightMm);
+  }
+}
+
+function drawSections(drawing: Drawing, bundle: Bundle, sections: readonly [Section, SectionPlan][], from: number, cords: (role: string | undefined) => Yarned | undefined): void {
+  let top = from;
+  for (const [section, plan] of sections) {
+    drawSection(drawing, bundle, section, plan, top, cords);
+    top += plan.heightMm;
   }
 }
 
@@ -166,23 +182,22 @@ function drawnEnds(ends: number): number {
 
 interface Strung {
   readonly bundle: Bundle;
-  readonly sections: readonly Section[];
-  readonly plans: readonly SectionPlan[];
+  readonly sections: readonly [Section, SectionPlan][];
 }
 
 /** The columns side by side, every end under its lark's head. */
 function string({ piece, plan }: MadeOf<MacramePiece, MacramePlan>, colourOf: (role: string) => string, totalMm: number): Strung[] {
   const unit = plan.widthMm / Math.max(1, plan.columns.reduce((sum, { ends }) => sum + ends * END_SPACING, 0) + (plan.columns.length - 1) * COLUMN_GAP);
   let left = (totalMm - plan.widthMm) / 2;
-  return plan.columns.map((column) => {
-    const described = piece.columns[column.index];
+  return pairsOf(piece.columns, plan.columns).map(([described, column]) => {
     const wide = column.ends * END_SPACING * unit;
     const count = drawnEnds(column.ends);
     const pitch = wide / count;
-    const homes = Array.from({ length: count }, (_, index) => left + (index + 0.5) * pitch);
+    const from = left;
+    const ends = Array.from({ length: count }, (_, index): End => ({ x: from + (index + 0.5) * pitch, y: 0, home: from + (index + 0.5) * pitch }));
     left += wide + COLUMN_GAP * unit;
-    const cord = { colour: colourOf(described?.yarn ?? ''), dMm: pitch / END_SPACING };
-    return { bundle: { cord, homes, ends: homes.map((x) => ({ x, y: 0 })) }, sections: described?.sections ?? [], plans: column.sections };
+    const cord = { colour: colourOf(described.yarn), dMm: pitch / END_SPACING };
+    return { bundle: { cord, ends }, sections: pairsOf(described.sections, column.sections) };
   });
 }
 
@@ -208,21 +223,14 @@ function mount(drawing: Drawing, strung: readonly Strung[], rod: MacramePiece['r
 
 export function drawMacrame(made: MadeOf<MacramePiece, MacramePlan>, title: string): HungPiece {
   const { piece, plan } = made;
-  const colourOf = (role: string): string => yarnColour(Object.hasOwn(piece.yarns, role) ? piece.yarns[role]?.colour : undefined);
+  const colourOf = (role: string): string => yarnColour(piece.yarns[role]?.colour);
   const drawing = new Drawing(piece.seed ?? 7, plan.knots);
   const widthMm = Math.max(plan.widthMm * 1.06, plan.rod?.lengthMm ?? 0, piece.rod.kind === 'ring' ? piece.rod.diameterMm * 1.1 : 0);
   const strung = string(made, colourOf, widthMm);
   mount(drawing, strung, piece.rod, widthMm / 2);
   const own = (near: Yarned) => (role: string | undefined): Yarned | undefined => (role === undefined ? undefined : { colour: colourOf(role), dMm: near.dMm });
   const longest = Math.max(0, ...plan.columns.map(({ heightMm }) => heightMm));
-  for (const { bundle, sections, plans } of strung) {
-    let top = 0;
-    plans.forEach((section, index) => {
-      const described = sections[index];
-      if (described !== undefined) drawSection(drawing, bundle, described, section, top, own(bundle.cord));
-      top += section.heightMm;
-    });
-  }
+  for (const { bundle, sections } of strung) drawSections(drawing, bundle, sections, 0, own(bundle.cord));
   drawFoot(drawing, strung, made, longest, own);
   return {
     kind: 'hung',
@@ -240,15 +248,10 @@ export function drawMacrame(made: MadeOf<MacramePiece, MacramePlan>, title: stri
 /** Below the columns all ends go on as one bundle, drawn together to a sheaf. */
 function drawFoot(drawing: Drawing, strung: readonly Strung[], { piece, plan }: MadeOf<MacramePiece, MacramePlan>, longest: number, own: (near: Yarned) => (role: string | undefined) => Yarned | undefined): void {
   const [first] = strung;
-  if (first === undefined || plan.foot.length === 0) return;
-  const ends = strung.flatMap(({ bundle }) => bundle.ends);
-  const middle = ends.reduce((sum, { x }) => sum + x, 0) / ends.length;
+  if (first === undefined || piece.foot === undefined) return;
+  const all = strung.flatMap(({ bundle }) => bundle.ends);
+  const middle = all.reduce((sum, { x }) => sum + x, 0) / all.length;
   const { cord } = first.bundle;
-  const bundle: Bundle = { cord, ends, homes: ends.map((_, index) => middle + (index - (ends.length - 1) / 2) * cord.dMm * GATHERED) };
-  let top = longest;
-  plan.foot.forEach((section, index) => {
-    const described = piece.foot?.[index];
-    if (described !== undefined) drawSection(drawing, bundle, described, section, top, own(cord));
-    top += section.heightMm;
-  });
+  const ends = all.map((end, index): End => ({ ...end, home: middle + (index - (all.length - 1) / 2) * cord.dMm * GATHERED }));
+  drawSections(drawing, { cord, ends }, pairsOf(piece.foot, plan.foot), longest, own(cord));
 }

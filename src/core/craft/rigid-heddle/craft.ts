@@ -48,7 +48,7 @@ function draw({ piece, plan }: Made, title: string): WovenPiece {
 
 const size = (mm: number, units: Units): string => amountText(lengthOf(mm, 'size'), units);
 
-export const RIGID_HEDDLE: Craft<HeddlePiece, HeddlePlan, never> = {
+export const RIGID_HEDDLE: Craft<HeddlePiece, HeddlePlan> = {
   words: { label: 'Rigid heddle', hours: 'at the loom', needs: 'Rigid heddle loom', material: 'Yarn', allMaterial: 'Warp and weft together', made: 'woven on a rigid heddle', search: 'weaving rigid heddle' },
   cautions: HEDDLE_CAUTIONS,
   example: {
@@ -77,5 +77,4 @@ export const RIGID_HEDDLE: Craft<HeddlePiece, HeddlePlan, never> = {
   summary: ({ piece, plan }, units) => `${String(plan.ends.count)} ends in the heddle, woven ${size(piece.size.widthMm, units)} wide`,
   size: ({ piece }, units) => `${size(piece.size.widthMm, units)} wide and ${size(piece.size.lengthMm, units)} long, without its fringe`,
   leastInsideMm: () => undefined,
-  figures: {},
 };

@@ -1,4 +1,4 @@
-/** What a browser loads to reckon a piece, as it comes over the wire. Words, figures, drawings and workings are no part of it. */
+/** What a browser loads to reckon a piece, as it comes over the wire. Figures and workings are no part of it. */
 import { brotliCompressSync, gzipSync } from 'node:zlib';
 import { build } from 'esbuild';
 import { expect, test } from 'vitest';
@@ -6,6 +6,8 @@ import { expect, test } from 'vitest';
 const MOST_BYTES = 25_000;
 /** All four engines together. */
 const MOST_BYTES_OF_ALL = 28_000;
+/** A whole island besides React: its fields and words, and of every craft the engine, amounts, changes and drawing. */
+const MOST_BYTES_OF_ISLAND = 72_000;
 
 interface Bundle {
   readonly code: Uint8Array;
@@ -16,7 +18,7 @@ interface Bundle {
 async function bundle(contents: string): Promise<Bundle> {
   const { outputFiles, metafile } = await build({
     stdin: { contents, resolveDir: process.cwd(), loader: 'ts' },
-    bundle: true, minify: true, format: 'esm', platform: 'browser', target: 'es2022', write: false, metafile: true,
+    bundle: true, minify: true, jsx: 'automatic', external: ['react', 'react-dom', 'astro:*'], format: 'esm', platform: 'browser', target: 'es2022', write: false, metafile: true,
   });
   return { code: outputFiles[0]?.contents ?? new Uint8Array(), files: Object.keys(metafile.inputs) };
 }
@@ -36,4 +38,11 @@ test.each([
 ])('the engine of %s by itself stays below 25 kB in the weakest compression, too', async (_, contents) => {
   const { byteLength } = gzipSync((await bundle(contents)).code);
   expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES);
+});
+
+test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx', 'series/TrialLooms.tsx'])('the island %s loads no figure of a technique, and stays below 72 kB', async (island) => {
+  const { code, files } = await bundle(`export * from './src/islands/${island}';`);
+  const { byteLength } = brotliCompressSync(code);
+  expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES_OF_ISLAND);
+  expect(files.filter((file) => /craft\/(?:show-how|figures\/kinds|macrame\/figures)\//u.test(file))).toEqual([]);
 });
