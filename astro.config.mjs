@@ -1,4 +1,5 @@
 // The site: server-rendered by default, with React only where a page must answer the hand at once.
+import { fileURLToPath } from 'node:url';
 import { defineConfig } from 'astro/config';
 import node from '@astrojs/node';
 import react from '@astrojs/react';
@@ -27,6 +28,9 @@ export default defineConfig({
   },
   devToolbar: { enabled: false },
   vite: {
+    // A lesson's text is read in a worker, where the browser's own file of this package finds no document to ask.
+    resolve: { alias: { 'decode-named-character-reference': fileURLToPath(import.meta.resolve('decode-named-character-reference')) } },
+    worker: { format: 'es' },
     ssr: { external: ['sequelize', 'mariadb', 'sharp', '@node-rs/argon2', 'stripe', 'nodemailer', 'multer'] },
   },
 });

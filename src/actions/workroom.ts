@@ -1,7 +1,7 @@
 /** Forms of the teacher's workroom: series, parts and their order, texts, settings, gathering lists, publishing. */
 import {
   GatheringForm, GatheringItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
-  NewGatheringForm, NewLessonForm, NewSeriesForm, SeriesDetailsForm, SeriesForm,
+  NewGatheringForm, NewLessonForm, NewSeriesForm, RestoreTextForm, SeriesDetailsForm, SeriesForm,
 } from '#contracts/workroom.ts';
 import { partsList } from '#core/series/parts-list.ts';
 import { clockWords } from '#core/moment-words.ts';
@@ -14,6 +14,7 @@ import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatherin
 import type { PartPlace } from '#server/use-cases/workroom/_part-place.ts';
 import { addLesson, moveLesson, putBackLesson, takeOutLesson } from '#server/use-cases/workroom/change-lessons.ts';
 import { createSeries } from '#server/use-cases/workroom/create-series.ts';
+import { restoreLessonText } from '#server/use-cases/workroom/restore-lesson-text.ts';
 import { saveLessonDraft } from '#server/use-cases/workroom/save-lesson-draft.ts';
 import { saveLessonSettings } from '#server/use-cases/workroom/save-lesson-settings.ts';
 import { saveSeriesDetails } from '#server/use-cases/workroom/save-series-details.ts';
@@ -66,6 +67,10 @@ export const workroom = {
   saveDraft: formAction(LessonDraftForm, async (input, ctx) => {
     const { part } = await saveLessonDraft(ctx, input);
     return { to: partAt(part), said: savedNow(ctx) };
+  }),
+  restoreText: formAction(RestoreTextForm, async (input, ctx) => {
+    const part = await restoreLessonText(ctx, input);
+    return { to: partAt(part), said: 'Taken up again. The text that stood here is kept among the versions.' };
   }),
   saveSettings: formAction(LessonSettingsForm, async (input, ctx) => {
     const part = await saveLessonSettings(ctx, input);

@@ -46,8 +46,9 @@ export const LessonDraftForm = z.object({
 });
 export type LessonDraftInput = z.output<typeof LessonDraftForm>;
 
-/** A text to be read while it is being written; nothing is kept. */
-export const LessonCheckInput = LessonDraftForm.pick({ source: true });
+/** An earlier text to be taken up again: `v3` for a published version, else the public id of one that was set aside. */
+export const RestoreTextForm = z.object({ lesson: publicId, revision, text: z.string().regex(/^(?:v\d{1,6}|[0-9a-z]{26})$/) });
+export type RestoreTextInput = z.output<typeof RestoreTextForm>;
 
 /** How a text was read: without problems it can be published. */
 export interface TextRemarks {

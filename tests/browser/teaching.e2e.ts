@@ -2,6 +2,7 @@
 import { randomBytes } from 'node:crypto';
 import { expect, type Page } from 'playwright/test';
 import { stateOf } from './support/demo-people.ts';
+import { expectText, fillText, textField } from './support/lesson-text.ts';
 import { expectFaultless, test } from './support/test.ts';
 
 const newTitle = (): string => `Ebb ${randomBytes(3).toString('hex')}`;
@@ -22,10 +23,10 @@ async function putInPart(page: Page, title: string): Promise<void> {
   await expect(page.getByRole('heading', { level: 3, name: title })).toBeVisible();
 }
 
-async function writePart(page: Page, desk: string, title: string, words: string): Promise<void> {
+async function writePart(page: Page, desk: string, title: string, words: string, withScript = true): Promise<void> {
   await page.goto(desk);
   await page.getByRole('link', { name: title, exact: true }).click();
-  await page.getByLabel('Text of this part').fill(words);
+  await fillText(page, words, withScript);
   await press(page, 'Save');
   await expect(inMain(page).getByText(/^Saved \d\d:\d\d$/).or(page.getByRole('status').filter({ hasText: /^Saved \d\d:\d\d$/ })).first()).toBeVisible();
 }
@@ -63,10 +64,10 @@ for (const javaScriptEnabled of [true, false]) {
       await expect(parts(page)).toHaveText(['Dress the loom', 'Weave the foot']);
 
       // A mistake is kept, told with its line, and mended.
-      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\nWind {1+1} ends.');
+      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\nWind {1+1} ends.', javaScriptEnabled);
       await expect(inMain(page).getByRole('link', { name: 'Line 3' })).toBeVisible();
       await expect(inMain(page).getByText(/Curly braces mean code/)).toBeVisible();
-      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\n<Step id="wind">Wind <Amount of="ends"/>.</Step>');
+      await writePart(page, desk, 'Dress the loom', 'Take the frame.\n\n<Step id="wind">Wind <Amount of="ends"/>.</Step>', javaScriptEnabled);
       await expect(inMain(page).getByText('It can be read as it stands.')).toBeVisible();
       if (javaScriptEnabled) await expectFaultless(page);
 
@@ -83,7 +84,7 @@ for (const javaScriptEnabled of [true, false]) {
       await press(page, 'Put it on the list');
       await expect(inMain(page).getByRole('listitem').filter({ hasText: 'Blunt needle' }).first()).toBeVisible();
 
-      await writePart(page, desk, 'Weave the foot', '<Step id="weave">Weave eight rows.</Step>');
+      await writePart(page, desk, 'Weave the foot', '<Step id="weave">Weave eight rows.</Step>', javaScriptEnabled);
       await page.getByRole('link', { name: 'Settings', exact: true }).click();
       await page.getByLabel('On a date, for everybody').check();
       await page.getByLabel('Day and time').fill('2020-01-01T09:00');
@@ -146,15 +147,24 @@ for (const javaScriptEnabled of [true, false]) {
       await page.getByRole('link', { name: 'One', exact: true }).click();
       const other = await context.newPage();
       await other.goto(page.url());
-      await writePart(other, desk, 'One', 'Theirs.');
-      await page.getByLabel('Text of this part').fill('Mine.');
+      await writePart(other, desk, 'One', 'Theirs.', javaScriptEnabled);
+      await fillText(page, 'Mine.', javaScriptEnabled);
       await press(page, 'Save');
       await expect(inMain(page).getByText('Another window saved this text in the meantime')).toBeVisible();
-      await expect(page.getByLabel('Text of this part')).toHaveValue('Mine.');
+      await expectText(page, 'Mine.', javaScriptEnabled);
       await press(page, 'Keep mine');
       await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
       await page.reload();
-      await expect(page.getByLabel('Text of this part')).toHaveValue('Mine.');
+      await expectText(page, 'Mine.', javaScriptEnabled);
+
+      // The text that was written over is among the earlier ones, and is taken up again.
+      await page.getByRole('link', { name: 'Versions', exact: true }).click();
+      await page.getByLabel('From').selectOption({ index: 1 });
+      await press(page, 'Compare');
+      await expect(inMain(page).getByRole('region', { name: 'What changed', exact: true }).last()).toContainText(/Theirs\.|Mine\./);
+      await inMain(page).getByRole('listitem').filter({ hasText: 'Set aside' }).getByRole('button', { name: /Take it up again/ }).last().click();
+      await expect(page.getByText('Taken up again. The text that stood here is kept among the versions.')).toBeVisible();
+      await expectText(page, 'Theirs.', javaScriptEnabled);
     });
   });
 }
@@ -178,8 +188,8 @@ test.describe('by keyboard alone', () => {
     await page.getByRole('combobox', { name: 'Amount from the plan' }).focus();
     await page.keyboard.type('Hanging cord');
     await page.keyboard.press('Enter');
-    await expect(page.getByLabel('Text of this part')).toBeFocused();
-    await expect(page.getByLabel('Text of this part')).toHaveValue(/<Amount of="cord"\/>/);
+    await expect(textField(page)).toBeFocused();
+    await expect(textField(page)).toContainText('<Amount of="cord"/>');
     await page.keyboard.press('Control+z');
     await page.keyboard.press('Control+s');
     await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible();

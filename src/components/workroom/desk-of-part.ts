@@ -5,7 +5,7 @@ import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { titleHalves } from '#core/series/title.ts';
 import type { Units } from '#core/units/units.ts';
-import type { Sayable } from '#islands/workroom/PutInButtons.tsx';
+import type { Sayable } from '#islands/writing/sayable.ts';
 import type { LessonDesk } from '#server/queries/workroom/lesson-desk.ts';
 
 /** The amounts the pattern piece tells; empty while it is not described. */
@@ -16,7 +16,7 @@ export function amountsOfDesk({ pattern }: Pick<LessonDesk, 'pattern'>, units: U
 
 export function sayableOf({ media }: Pick<LessonDesk, 'media'>, amounts: readonly AmountGroup[]): Sayable {
   return {
-    amounts: amounts.flatMap(({ choices }) => choices.map(({ key, label, text }) => ({ value: key, label: `${label}: ${text}` }))),
+    amounts: amounts.flatMap(({ choices }) => choices.map(({ key, label, text }) => ({ key, label, text }))),
     figures: FIGURE_KINDS.map((kind) => ({ value: kind, label: capital(kind.replaceAll('-', ' ')) })),
     media: media.map(({ kind, name, title }) => ({ value: `${kind}/${name}`, label: `${capital(kind)}: ${title === '' ? name : title}` })),
   };

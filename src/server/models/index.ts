@@ -1,5 +1,6 @@
 /** All tables. The only barrel of the house: a use-case that touches four tables names them in one line. */
 export { AuditEntry } from './audit-entry.ts';
+export { EarlierDraft } from './earlier-draft.ts';
 export { EmailToken } from './email-token.ts';
 export { Enrolment } from './enrolment.ts';
 export { GatheringItem } from './gathering-item.ts';

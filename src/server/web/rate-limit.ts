@@ -35,8 +35,7 @@ export const RATE_RULES = {
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
   /** Videos begun by one teacher. */
   video: { name: 'video', limit: 60, windowSeconds: 3_600 },
-  /** Texts read while they are being written, and drafts kept by themselves, of one teacher. */
-  lessonCheck: { name: 'lesson-check', limit: 120, windowSeconds: 60 },
+  /** Drafts kept by themselves, of one teacher. */
   lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },
 } as const satisfies Record<string, RateRule>;
 

@@ -34,7 +34,6 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/ticks': 'signed-in',
   '/api/video-place': 'signed-in',
   '/api/videos/[...upload]': 'teacher',
-  '/api/workroom/lesson-check': 'teacher',
   '/api/workroom/lesson-draft': 'teacher',
   '/api/workroom/captions': 'teacher',
   '/api/workroom/videos/[video]': 'teacher',

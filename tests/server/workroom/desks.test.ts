@@ -3,7 +3,7 @@ import { statementListeners } from '#server/db/sequelize.ts';
 import { MyPieceRow, PatternPiece, WorkroomHelper, type Series, type User } from '#server/models/index.ts';
 import { draftOf } from '#server/queries/workroom/draft-of.ts';
 import { lessonDesk } from '#server/queries/workroom/lesson-desk.ts';
-import { lessonVersions, versionSource } from '#server/queries/workroom/lesson-versions.ts';
+import { lessonText, lessonTexts } from '#server/queries/workroom/lesson-texts.ts';
 import { seenAs } from '#server/queries/workroom/seen-as.ts';
 import { seriesDesk } from '#server/queries/workroom/series-desk.ts';
 import { takeOutLesson } from '#server/use-cases/workroom/change-lessons.ts';
@@ -100,8 +100,8 @@ describe('the versions of a part', () => {
   test('come newest first, with their texts', async () => {
     const lesson = await buildLesson({ seriesId: series.id });
     await saveLessonDraft(await contextFor(teacher), { lesson: lesson.publicId, revision: 0, source: 'Weave two rows.' });
-    expect((await lessonVersions(lesson.publicId)).map(({ number }) => number)).toEqual([1]);
-    expect([await versionSource(lesson.publicId, 1), await versionSource(lesson.publicId, 2)]).toEqual(['Weave **one row**.', null]);
+    expect((await lessonTexts(lesson.publicId)).map(({ key, number }) => [key, number])).toEqual([['v1', 1]]);
+    expect([await lessonText(lesson.publicId, 'v1'), await lessonText(lesson.publicId, 'v2')]).toEqual(['Weave **one row**.', null]);
     expect(await draftOf(await actorOf(teacher), lesson.publicId)).toEqual({ revision: 1, source: 'Weave two rows.' });
   });
 });

@@ -2,7 +2,6 @@ import { beforeEach, describe, expect, test } from 'vitest';
 import type { APIContext } from 'astro';
 import { Lesson, User } from '#server/models/index.ts';
 import { RATE_RULES } from '#server/web/rate-limit.ts';
-import { POST as check } from '../../../src/pages/api/workroom/lesson-check.ts';
 import { POST as keep } from '../../../src/pages/api/workroom/lesson-draft.ts';
 import { contextFor, type TestContext } from '../../support/context.ts';
 import { buildLesson, buildSeries, buildUser, buildWorkroom } from '../../support/factories.ts';
@@ -17,7 +16,7 @@ beforeEach(async () => {
   ctx = await contextFor(teacher);
 });
 
-async function send(endpoint: typeof check, body: string, as = ctx): Promise<{ status: number; told: unknown }> {
+async function send(endpoint: typeof keep, body: string, as = ctx): Promise<{ status: number; told: unknown }> {
   const request = new Request('http://127.0.0.1/api/workroom', { method: 'POST', body });
   const answer = await endpoint({ request, locals: { ctx: as } } as unknown as APIContext);
   return { status: answer.status, told: await answer.json() };
@@ -25,11 +24,6 @@ async function send(endpoint: typeof check, body: string, as = ctx): Promise<{ s
 const draft = (source: string, revision = 0): string => JSON.stringify({ lesson: lesson.publicId, revision, source });
 
 describe('a text that is being written', () => {
-  test('is read, and nothing of it is kept', async () => {
-    expect(await send(check, JSON.stringify({ source: 'Wind {1} ends.' }))).toMatchObject({ status: 200, told: { problems: [{ line: 1, code: 'code' }], warnings: [] } });
-    expect((await lesson.reload()).draftSource).toBe('');
-  });
-
   test('is kept with the time on the teacher’s own clock', async () => {
     expect(await send(keep, draft('Wind it.'))).toEqual({ status: 200, told: { revision: 1, savedAt: '11:00', problems: [], warnings: [] } });
   });
@@ -59,9 +53,9 @@ describe('a text that is being written', () => {
     expect((await send(keep, draft('Mine.'), other)).status).toBe(404);
   });
 
-  test('is read so often and no more', async () => {
-    const { limit } = RATE_RULES.lessonCheck;
-    for (let count = 0; count < limit; count += 1) await send(check, '{');
-    expect((await send(check, JSON.stringify({ source: 'A' }))).status).toBe(429);
+  test('is kept so often and no more', async () => {
+    const { limit } = RATE_RULES.lessonDraft;
+    for (let count = 0; count < limit; count += 1) await send(keep, '{');
+    expect((await send(keep, draft('A'))).status).toBe(429);
   });
 });

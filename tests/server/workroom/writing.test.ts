@@ -5,6 +5,8 @@ import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 import { takeBackSeries } from '#server/use-cases/series/take-back-series.ts';
 import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatheringItem } from '#server/use-cases/workroom/change-gathering.ts';
 import { createSeries } from '#server/use-cases/workroom/create-series.ts';
+import { restoreLessonText } from '#server/use-cases/workroom/restore-lesson-text.ts';
+import { lessonText, lessonTexts } from '#server/queries/workroom/lesson-texts.ts';
 import { saveLessonDraft } from '#server/use-cases/workroom/save-lesson-draft.ts';
 import { saveLessonSettings } from '#server/use-cases/workroom/save-lesson-settings.ts';
 import { saveSeriesDetails } from '#server/use-cases/workroom/save-series-details.ts';
@@ -65,6 +67,62 @@ describe('a draft', () => {
   test('of two windows that save at once one is heard', async () => {
     const results = await Promise.allSettled([write(first, 'One.'), write(first, 'Two.')]);
     expect(results.map(({ status }) => status).toSorted()).toEqual(['fulfilled', 'rejected']);
+  });
+});
+
+describe('earlier texts', () => {
+  const kept = async (lesson: Lesson): Promise<(string | null)[]> => Promise.all((await lessonTexts(lesson.publicId)).map(({ key }) => lessonText(lesson.publicId, key)));
+  const restore = (lesson: Lesson, text: string, revision: number, as = ctx) => restoreLessonText(as, { lesson: lesson.publicId, revision, text });
+  const writeLater = (minutes: number, source: string, revision: number) =>
+    saveLessonDraft({ ...ctx, clock: { now: () => new Date(Date.now() + minutes * 60_000) } }, { lesson: first.publicId, revision, source });
+
+  test('of two windows both are kept, whichever goes on', async () => {
+    await write(first, 'Theirs.');
+    await expect(write(first, 'Mine.')).rejects.toMatchObject({ code: 'CONFLICT' });
+    expect((await kept(first)).toSorted()).toEqual(['Mine.', 'Theirs.']);
+    await write(first, 'Mine.', 1);
+    expect((await first.reload()).draftSource).toBe('Mine.');
+  });
+
+  test('of an earlier sitting are kept, those of one sitting are not', async () => {
+    await write(first, 'One.');
+    await writeLater(60, 'Two.', 1);
+    await writeLater(1, 'Three.', 2);
+    expect(await kept(first)).toEqual(['One.']);
+    expect((await lessonTexts(first.publicId))[0]).toMatchObject({ number: null, authorName: 'Ilse Marrow' });
+  });
+
+  test('are taken up again as the draft, which is set aside; students go on reading what was published', async () => {
+    await makeReady();
+    await publishSeries(ctx, series.slug);
+    const read = (await first.reload()).publishedVersionId;
+    await write(first, 'Something else.', 1);
+    await restore(first, 'v1', 2);
+    expect(await first.reload()).toMatchObject({ draftSource: '<Step id="gather">Gather what it takes.</Step>', draftRevision: 3, publishedVersionId: read });
+    expect(await kept(first)).toContain('Something else.');
+    const [aside] = (await lessonTexts(first.publicId)).filter(({ number }) => number === null);
+    await restore(first, aside?.key ?? '', 3);
+    expect((await first.reload()).draftSource).toBe('Something else.');
+  });
+
+  test('taken up twice are there once', async () => {
+    await makeReady();
+    await publishSeries(ctx, series.slug);
+    await restore(first, 'v1', 1);
+    expect((await first.reload()).draftRevision).toBe(1);
+    expect(await kept(first)).toHaveLength(1);
+  });
+
+  test('that are not there, of another part, over a newer draft or for another teacher are refused and change nothing', async () => {
+    await makeReady();
+    await publishSeries(ctx, series.slug);
+    await write(first, 'New.', 1);
+    const elsewhere = await contextFor(await buildUser());
+    await expect(restore(first, 'v9', 2)).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    await expect(restore(first, '0'.repeat(26), 2)).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    await expect(restore(first, 'v1', 1)).rejects.toMatchObject({ code: 'CONFLICT' });
+    await expect(restore(first, 'v1', 2, elsewhere)).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    expect((await first.reload()).draftSource).toBe('New.');
   });
 });
 

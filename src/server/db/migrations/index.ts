@@ -10,6 +10,7 @@ import { createQueues } from './0007-create-queues.ts';
 import { createVideos } from './0008-create-videos.ts';
 import { addWovenSoFar } from './0009-add-woven-so-far.ts';
 import { createOpenings } from './0010-create-openings.ts';
+import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -22,4 +23,5 @@ export const migrations: readonly Migration[] = [
   createVideos,
   addWovenSoFar,
   createOpenings,
+  createEarlierDrafts,
 ];

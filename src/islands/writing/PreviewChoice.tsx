@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '#islands/ui/Button.tsx';
 import { Select } from '#islands/ui/Field.tsx';
-import { DRAFT_KEPT } from '#islands/workroom/draft-kept.ts';
+import { DRAFT_KEPT } from '#islands/writing/draft-kept.ts';
 
 interface PreviewChoiceProps {
   /** Address of the preview as a page of its own. */

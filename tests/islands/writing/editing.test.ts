@@ -1,8 +1,8 @@
 import { describe, expect, it } from 'vitest';
 import type { DraftKept } from '#contracts/workroom.ts';
-import { beginEditing, editingAfter, isUnsaved, maySave, statusWords, type EditEvent, type Editing } from '#islands/workroom/editing.ts';
-import { lineAt, stretchOfLine, stretchOfRemark, wordsOfLine } from '#islands/workroom/lines.ts';
-import { putIn, type Snippet } from '#islands/workroom/put-in.ts';
+import { beginEditing, editingAfter, isUnsaved, maySave, statusWords, type EditEvent, type Editing } from '#islands/writing/editing.ts';
+import { lineAt, stretchOfLine, stretchOfRemark, wordsOfLine } from '#islands/writing/lines.ts';
+import { putIn, type Snippet } from '#islands/writing/put-in.ts';
 
 const NONE = { problems: [], warnings: [] };
 const problem = { line: 3, column: 1, code: 'code', reason: 'Curly braces mean code.' } as const;

@@ -7,6 +7,12 @@ export type Snippet =
   | { readonly kind: 'figure'; readonly of: string }
   | { readonly kind: 'picture' | 'video'; readonly name: string };
 
+/** The tag for a file of the series, by its name as lists hold it: `video/dress-the-loom`. */
+export function snippetOfMedia(value: string): Snippet {
+  const [kind, name = ''] = value.split('/');
+  return { kind: kind === 'video' ? 'video' : 'picture', name };
+}
+
 /** A change of the text: `text` takes the place of `from` to `to`, and `selectFrom` to `selectTo` is then to be typed over. */
 export interface PutIn {
   readonly from: number;

@@ -1,6 +1,6 @@
 import { cleanup, fireEvent, render, screen } from '@testing-library/react';
 import { afterEach, describe, expect, it, vi } from 'vitest';
-import { Remarks } from '#islands/workroom/Remarks.tsx';
+import { Remarks } from '#islands/writing/Remarks.tsx';
 
 afterEach(cleanup);
 

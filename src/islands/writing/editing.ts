@@ -16,6 +16,8 @@ export interface Editing {
   readonly readEdits: number;
   /** What went wrong with the last keeping, in words. */
   readonly trouble: string | null;
+  /** The line is down: what was typed is kept on this device meanwhile. */
+  readonly away: boolean;
   /** What another window kept in the meantime. Nothing more is kept by itself until the writer has decided. */
   readonly behind: { readonly revision: number; readonly source: string } | null;
 }
@@ -25,7 +27,9 @@ export type EditEvent =
   | { readonly kind: 'read'; readonly edits: number; readonly remarks: TextRemarks }
   | { readonly kind: 'save-began' }
   | { readonly kind: 'kept'; readonly edits: number; readonly draft: DraftKept }
-  | { readonly kind: 'failed'; readonly says: string }
+  | { readonly kind: 'failed'; readonly says: string; readonly away?: boolean }
+  /** What an earlier visit left on this device was put into the field; it was written over `revision`. */
+  | { readonly kind: 'brought-back'; readonly revision: number }
   | { readonly kind: 'behind'; readonly revision: number; readonly source: string }
   /** Go on from the other window's text, with one's own over it. */
   | { readonly kind: 'keep-mine' }
@@ -33,7 +37,7 @@ export type EditEvent =
   | { readonly kind: 'took-other' };
 
 export function beginEditing(revision: number, remarks: TextRemarks): Editing {
-  return { edits: 0, keptEdits: 0, revision, savedAt: null, saving: false, remarks, readEdits: 0, trouble: null, behind: null };
+  return { edits: 0, keptEdits: 0, revision, savedAt: null, saving: false, remarks, readEdits: 0, trouble: null, away: false, behind: null };
 }
 
 /** Whether something on the screen is not kept yet. */
@@ -53,13 +57,15 @@ export function editingAfter(state: Editing, event: EditEvent): Editing {
     case 'read':
       return withRemarks(state, event.edits, event.remarks);
     case 'save-began':
-      return { ...state, saving: true, trouble: null };
+      return { ...state, saving: true, trouble: null, away: false };
     case 'kept': {
       const { revision, savedAt, problems, warnings } = event.draft;
       return withRemarks({ ...state, saving: false, trouble: null, revision, savedAt, keptEdits: Math.max(state.keptEdits, event.edits) }, event.edits, { problems, warnings });
     }
     case 'failed':
-      return { ...state, saving: false, trouble: event.says };
+      return { ...state, saving: false, trouble: event.says, away: event.away ?? false };
+    case 'brought-back':
+      return { ...state, edits: state.edits + 1, revision: event.revision };
     case 'behind':
       return { ...state, saving: false, trouble: null, behind: { revision: event.revision, source: event.source } };
     case 'keep-mine':

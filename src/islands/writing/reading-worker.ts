@@ -1,0 +1,7 @@
+/** Reads lesson texts apart from the page, so that typing never waits for it. One text in, its remarks out. */
+import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
+
+self.addEventListener('message', ({ data }: MessageEvent<string>) => {
+  const reading = parseLessonText(data);
+  self.postMessage({ problems: reading.problems, warnings: reading.ok ? reading.warnings : [] });
+});

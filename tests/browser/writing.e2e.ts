@@ -1,0 +1,99 @@
+/** Writing a part in the real editor: hostile texts, suggestions by keyboard, a lost line, a long text. */
+import { expect, type Page } from 'playwright/test';
+import { stateOf } from './support/demo-people.ts';
+import { expectText, fillText, textField } from './support/lesson-text.ts';
+import { expectFaultless, test } from './support/test.ts';
+
+test.use({ storageState: stateOf('ilse') });
+
+const inMain = (page: Page) => page.getByRole('main');
+const remarks = (page: Page) => inMain(page).getByRole('region', { name: 'Line by line' });
+
+/** A part of a series of its own, so that nobody else's text is touched. */
+async function openNewPart(page: Page): Promise<void> {
+  await page.goto('/workroom/series/new');
+  await page.getByLabel('Title').fill(`Spring tide ${Date.now().toString(36)}`);
+  await inMain(page).getByRole('button', { name: 'Make the series' }).click();
+  await page.getByLabel('Put in a part').fill('One');
+  await inMain(page).getByRole('button', { name: 'Put it in', exact: true }).first().click();
+  await page.getByRole('link', { name: 'One', exact: true }).click();
+  await expect(textField(page)).toBeVisible();
+}
+
+/** Each is refused at line 3, in words of ours. */
+const HOSTILE: readonly (readonly [source: string, reason: RegExp])[] = [
+  ['import x from "fs"', /begin program code/],
+  ['{process.env.KEY}', /Curly braces mean code/],
+  ['<script>alert(1)</script>', /lessons hold no HTML/],
+  ['<img src=x onerror=alert(1)>', /straight quotes/],
+  ['<iframe src="https://e"/>', /lessons hold no HTML/],
+  ['<svg><a href="javascript:1"/></svg>', /lessons hold no HTML/],
+  ['<Caution title="Nails" onClick="x">Words.</Caution>', /has no "onClick"/],
+  ['<constructor/>', /lessons hold no HTML/],
+  ['<!-- c -->', /Hidden remarks/],
+  ['[a](java&#115;cript:alert(1))', /A link begins with/],
+  ['[a](//evil.example)', /cannot begin with/],
+  ['<Video name="../../etc/passwd"/>', /does not work/],
+  ['![a](data:image/svg+xml,x)', /A picture is named/],
+  ['Wind \u202E38 ends', /writing direction/],
+];
+
+test('hostile texts typed into the editor run nowhere and are told with line and reason', async ({ page }) => {
+  test.setTimeout(120_000);
+  page.on('dialog', (dialog) => { throw new Error(`a dialog opened: ${dialog.message()}`); });
+  await openNewPart(page);
+  for (const [source, reason] of HOSTILE) {
+    await fillText(page, `Take the frame.\n\n${source}`);
+    await expect(remarks(page).getByText(reason).first()).toBeVisible();
+    await expect(remarks(page).getByRole('link', { name: 'Line 3' }).first()).toBeVisible();
+  }
+  await fillText(page, 'Take the frame.');
+  await expect(remarks(page).getByText('It can be read as it stands.')).toBeVisible();
+  await expectFaultless(page);
+});
+
+test('by keyboard alone: a step and an amount from the palette, the remark by F8, out by Tab', async ({ page }) => {
+  await page.goto('/workroom/series/low-tide');
+  await page.getByRole('link', { name: 'First rows of tabby', exact: true }).click();
+  await textField(page).focus();
+  await page.keyboard.press('Control+End');
+  await page.keyboard.type('\n\n/step');
+  await expect(page.getByRole('option', { name: /Step to tick/ })).toBeVisible();
+  await page.keyboard.press('Enter');
+  await page.keyboard.type('Wind ');
+  await page.keyboard.press('Control+k');
+  await expect(page.getByRole('option', { name: 'Caution' })).toBeVisible();
+  await page.keyboard.type('Hanging cord');
+  await expect(page.getByRole('option', { name: 'Caution' })).toHaveCount(0);
+  await expect(page.getByRole('option', { name: /Hanging cord.*\d/ })).toBeVisible();
+  await page.keyboard.press('Enter');
+  await expect(textField(page)).toContainText('Wind <Amount of="cord"/>');
+  await page.keyboard.type(' {x}');
+  await expect(remarks(page).getByText(/Curly braces mean code/)).toBeVisible();
+  await page.keyboard.press('Tab');
+  await expect(textField(page)).not.toBeFocused();
+  // What stood here before stands again, so that other journeys find it.
+  await page.getByRole('link', { name: 'Versions', exact: true }).click();
+  await inMain(page).getByRole('button', { name: /Take it up again: Version/ }).first().click();
+  await expect(page.getByText(/Taken up again/)).toBeVisible();
+});
+
+test('what is typed without a line survives a reload and goes out when there is signal', async ({ browser, baseURL }) => {
+  // A page of its own: a browser tells its console of every lost line.
+  const context = await browser.newContext({ storageState: stateOf('ilse'), ...(baseURL === undefined ? {} : { baseURL }) });
+  const page = await context.newPage();
+  await openNewPart(page);
+  await context.route('**/api/workroom/lesson-draft', (route) => route.abort('internetdisconnected'));
+  await fillText(page, 'Wind it tight.');
+  await expect(inMain(page).getByText('Kept on this device. It goes out when there is signal.')).toBeVisible();
+  await page.reload();
+  await expectText(page, 'Wind it tight.');
+  await expect(inMain(page).getByText(/could not send stands in the text again/)).toBeVisible();
+  await context.unroute('**/api/workroom/lesson-draft');
+  await inMain(page).getByRole('button', { name: 'Save', exact: true }).click();
+  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible();
+  await page.reload();
+  await expectText(page, 'Wind it tight.');
+  await expect(inMain(page).getByText(/could not send/)).toHaveCount(0);
+  await context.close();
+});
