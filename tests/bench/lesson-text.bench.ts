@@ -1,9 +1,10 @@
 // How long reading a lesson takes: of the usual length, at the greatest length, and the slowest texts that the limits
 // let through. The last are why reading happens in threads.
-import { readFileSync } from 'node:fs';
+import { readdirSync, readFileSync } from 'node:fs';
 import { bench, describe } from 'vitest';
 import { LIMITS } from '#core/lesson-text/limits.ts';
 import { parseLessonText } from '#core/lesson-text/parse-lesson-text.ts';
+import { KeptReadings } from '#core/lesson-text/read-in-stretches.ts';
 import { preScan } from '#core/lesson-text/pre-scan.ts';
 import { treeIsValid } from '#core/lesson-text/tree-is-valid.ts';
 
@@ -12,9 +13,21 @@ const prose = `${'You wind one long thread round the nails, up and down, until a
 const longest = prose.repeat(Math.floor(LIMITS.sourceLength / prose.length));
 const read = parseLessonText(lesson);
 
+/** All seven parts of a series again and again up to the greatest length; each step with a name of its own. */
+const folder = new URL('../../content/series/low-tide/', import.meta.url);
+const series = readdirSync(folder).filter((name) => name.endsWith('.mdx')).map((name) => readFileSync(new URL(name, folder), 'utf8')).join('\n\n');
+const realistic = Array.from({ length: 3 }, (_, turn) => series.replace(/<Step id="/g, `<Step id="t${String(turn)}-`).replace(/ {2}\n/g, '\n')).join('\n\n');
+const kept = new KeptReadings();
+parseLessonText(realistic, kept);
+let edits = 0;
+/** A letter more in the middle, as one types. */
+const edited = (): string => `${realistic.slice(0, 90_000)}${'x'.repeat((edits += 1) % 50)}${realistic.slice(90_000)}`;
+
 describe('reading a lesson', () => {
   bench('of eight thousand characters', () => void parseLessonText(lesson));
   bench('of two hundred thousand characters of prose', () => void parseLessonText(longest));
+  bench(`of ${String(realistic.length)} characters of lessons as they are`, () => void parseLessonText(realistic));
+  bench('of the same after an edit in the middle', () => void parseLessonText(edited(), kept));
   bench('looking at a kept tree again', () => void treeIsValid(read.ok && read.tree));
 });
 

@@ -24,6 +24,11 @@ export function explainSyntaxError(error: unknown, source: string): LessonProble
   return { line, column, code: 'tag', reason: tagReason(message, source) };
 }
 
+/** True for an error at a sign within the text: not for one that the end of the text caused, nor for tags that do not match. */
+export function isErrorOfSigns(error: unknown): boolean {
+  return parserMessage(error)?.ruleId === 'unexpected-character';
+}
+
 function tagReason(message: ParserMessage, source: string): string {
   const { reason, ruleId } = message;
   const named = /`<\/?([^`>]{0,80})>`/.exec(reason)?.[1];

@@ -13,7 +13,7 @@ import { preScan } from './pre-scan.ts';
 import { problemAt, type LessonProblem } from './problem.ts';
 import { readBlock } from './read-block.ts';
 import { readInline } from './read-inline.ts';
-import { readMarkdown } from './read-markdown.ts';
+import { KeptReadings, readInStretches } from './read-in-stretches.ts';
 import { slugOf, uniqueSlug } from './slugs.ts';
 import { surveyTree, type Definitions } from './survey.ts';
 import { headingAnchor, stepAnchor, TREE_VERSION, type Block, type LessonTree, type OutlineEntry } from './tree.ts';
@@ -33,12 +33,15 @@ export interface RefusedText {
   problems: LessonProblem[];
 }
 
-/** Reads a lesson's source. Never throws for anything a person can type; time is bounded by `LIMITS`. */
-export function parseLessonText(source: string): LessonText | RefusedText {
+/**
+ * Reads a lesson's source. Never throws for anything a person can type; time is bounded by `LIMITS`. Who reads a text
+ * again and again while it is written hands the same `kept` each time: only stretches that changed are parsed anew.
+ */
+export function parseLessonText(source: string, kept: KeptReadings = new KeptReadings()): LessonText | RefusedText {
   const text = source.replace(/\r\n?/g, '\n');
   const unfit = preScan(text);
   if (unfit !== undefined) return { ok: false, problems: [unfit] };
-  const read = readMarkdown(text);
+  const read = readInStretches(text, kept);
   if (!read.ok) return { ok: false, problems: [read.problem] };
   const survey = surveyTree(read.root);
   if (!survey.ok) return { ok: false, problems: [survey.problem] };

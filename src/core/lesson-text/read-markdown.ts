@@ -12,17 +12,23 @@ import { mdxExpression } from 'micromark-extension-mdx-expression';
 import { mdxJsx } from 'micromark-extension-mdx-jsx';
 import { mdxMd } from 'micromark-extension-mdx-md';
 import type { Root } from 'mdast';
-import { explainSyntaxError } from './explain-syntax.ts';
+import { explainSyntaxError, isErrorOfSigns } from './explain-syntax.ts';
 import type { LessonProblem } from './problem.ts';
 
 const extensions = [mdxJsx(), mdxExpression(), mdxMd(), gfmTable(), gfmStrikethrough({ singleTilde: false })];
 const mdastExtensions = [mdxJsxFromMarkdown(), mdxExpressionFromMarkdown(), gfmTableFromMarkdown(), gfmStrikethroughFromMarkdown()];
 
-/** The Markdown tree of a text that passed `preScan`, or what the parser stumbled over. */
-export function readMarkdown(source: string): { ok: true; root: Root } | { ok: false; problem: LessonProblem } {
+/** A Markdown tree, or what the parser stumbled over. */
+export type ReadText =
+  | { ok: true; root: Root }
+  /** `isOfSigns`: a tag or brace cannot be read as it is written, whatever comes after it. */
+  | { ok: false; problem: LessonProblem; isOfSigns: boolean };
+
+/** Reads a text that passed `preScan`, all at once. */
+export function readMarkdown(source: string): ReadText {
   try {
     return { ok: true, root: fromMarkdown(source, { extensions, mdastExtensions }) };
   } catch (error) {
-    return { ok: false, problem: explainSyntaxError(error, source) };
+    return { ok: false, problem: explainSyntaxError(error, source), isOfSigns: isErrorOfSigns(error) };
   }
 }
