@@ -41,3 +41,8 @@ export interface SeriesMediaFile {
   /** Whether `detail` is its teacher's draft, which students do not see yet. */
   readonly isDraft: boolean;
 }
+
+/** A picture was put into a series: the name by which its lessons speak of it. */
+export interface PicturePutIn {
+  readonly name: string;
+}

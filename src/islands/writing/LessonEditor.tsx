@@ -4,7 +4,8 @@ import { Button } from '#islands/ui/Button.tsx';
 import { Notice } from '#islands/ui/Notice.tsx';
 import { readCopy } from '#islands/writing/device-copy.ts';
 import { statusWords } from '#islands/writing/editing.ts';
-import { stretchOfLine, stretchOfRemark, wordsOfLine } from '#islands/writing/lines.ts';
+import { stretchOfLine, stretchOfRemark, wordsOfLine, type Stretch } from '#islands/writing/lines.ts';
+import { PictureDialog } from '#islands/writing/PictureDialog.tsx';
 import { OtherText } from '#islands/writing/OtherText.tsx';
 import { putIn, type Snippet } from '#islands/writing/put-in.ts';
 import { PutInButtons } from '#islands/writing/PutInButtons.tsx';
@@ -38,6 +39,7 @@ export function LessonEditor({ lesson, revision, remarks, lineWords, isEmpty, fi
   const shown = useRef<OpenText | null>(null);
   const [caretLine, setCaretLine] = useState(1);
   const [numbered, setNumbered] = useState(false);
+  const [picture, setPicture] = useState<{ file: File; place: number } | null>(null);
   const [broughtBack, setBroughtBack] = useState<string | null>(null);
   const textNow = useCallback(() => shown.current?.view.state.doc.toString() ?? box.current?.querySelector('textarea')?.value ?? '', []);
   const { state, change, save } = useDraft(textNow, lesson, revision, remarks);
@@ -54,7 +56,7 @@ export function LessonEditor({ lesson, revision, remarks, lineWords, isEmpty, fi
     }
     if (line !== null) opened.choose(opened.view, stretchOfLine(textNow(), line));
   };
-  const open = useTextView(box, { label: 'Text of this part', says: SAYS, sayable, onEdit: () => change({ kind: 'typed' }), onCaretLine: setCaretLine, onSave: save, onFiles: () => false }, onOpen);
+  const open = useTextView(box, { label: 'Text of this part', says: SAYS, sayable, onEdit: () => change({ kind: 'typed' }), onCaretLine: setCaretLine, onSave: save, onPicture: (file, place) => setPicture({ file, place }) }, onOpen);
 
   useEffect(() => {
     const form = box.current?.closest('form');
@@ -69,10 +71,12 @@ export function LessonEditor({ lesson, revision, remarks, lineWords, isEmpty, fi
     if (open !== null && state.readEdits === state.edits) open.underline(open.view, textNow(), state.remarks);
   }, [open, state.edits, state.readEdits, state.remarks, textNow]);
 
-  const put = (snippet: Snippet) => {
-    if (open === null) return;
-    const { from, to } = open.view.state.selection.main;
-    open.replaceStretch(open.view, putIn(textNow(), { from, to }, snippet));
+  const put = (snippet: Snippet, stretch: Stretch | undefined = open?.view.state.selection.main) => {
+    if (open !== null && stretch !== undefined) open.replaceStretch(open.view, putIn(textNow(), stretch, snippet));
+  };
+  const putPicture = (name: string, alt: string) => {
+    if (picture !== null) put({ kind: 'picture', name, alt }, { from: picture.place, to: picture.place });
+    setPicture(null);
   };
   const replaceWith = (source: string) => open?.replaceAll(open.view, source);
   const toggleNumbers = () => {
@@ -82,7 +86,8 @@ export function LessonEditor({ lesson, revision, remarks, lineWords, isEmpty, fi
 
   return (
     <div ref={box} className="lesson-editor" data-alive={open === null ? undefined : true}>
-      {open !== null && <PutInButtons sayable={sayable} onPutIn={put} />}
+      {open !== null && <PutInButtons sayable={sayable} onPutIn={put} onPicture={(file) => setPicture({ file, place: open.view.state.selection.main.head })} />}
+      {picture !== null && <PictureDialog lesson={lesson} file={picture.file} onDone={putPicture} onClose={() => setPicture(null)} />}
       {children}
       {broughtBack !== null && (
         <Notice title="What you typed on this device and could not send stands in the text again">

@@ -5,12 +5,13 @@ export type Snippet =
   | { readonly kind: 'step' | 'caution' | 'tip' | 'heading' }
   | { readonly kind: 'amount'; readonly key: string }
   | { readonly kind: 'figure'; readonly of: string }
-  | { readonly kind: 'picture' | 'video'; readonly name: string };
+  | { readonly kind: 'picture'; readonly name: string; readonly alt?: string }
+  | { readonly kind: 'video'; readonly name: string };
 
 /** The tag for a file of the series, by its name as lists hold it: `video/dress-the-loom`. */
 export function snippetOfMedia(value: string): Snippet {
   const [kind, name = ''] = value.split('/');
-  return { kind: kind === 'video' ? 'video' : 'picture', name };
+  return kind === 'video' ? { kind, name } : { kind: 'picture', name };
 }
 
 /** A change of the text: `text` takes the place of `from` to `to`, and `selectFrom` to `selectTo` is then to be typed over. */
@@ -72,10 +73,16 @@ function pieceOf(snippet: Snippet, words: string, source: string): Piece {
     case 'figure':
       return block(`<Figure of="${snippet.of}" caption="`, 'What it shows', '"/>');
     case 'picture':
+      if (snippet.alt !== undefined) return block(`<Picture name="${snippet.name}" alt="${inQuotes(snippet.alt)}"/>`, '', '');
       return block(`<Picture name="${snippet.name}" alt="`, 'What it shows, for those who do not see it', '"/>');
     case 'video':
       return block(`<Video name="${snippet.name}"/>`, '', '');
   }
+}
+
+/** Words as they can stand between the quotes of an attribute. */
+function inQuotes(words: string): string {
+  return words.replaceAll('&', '&amp;').replaceAll('"', '&quot;').replace(/\s+/g, ' ');
 }
 
 /** A name that no other step of the text has: students' ticks hang on it. */

@@ -25,8 +25,8 @@ export interface TextViewOptions {
   onEdit: () => void;
   onCaretLine: (line: number) => void;
   onSave: () => void;
-  /** Pictures that were dropped on the text or pasted into it. True when they are taken. */
-  onFiles: (files: readonly File[], place: number) => boolean;
+  /** A file that was dropped on the text or pasted into it, and where. */
+  onPicture: (file: File, place: number) => void;
 }
 
 const numbers = new Compartment();
@@ -37,7 +37,7 @@ export function openTextView(host: HTMLElement, options: TextViewOptions): Edito
   return new EditorView({ root, parent: root, state: EditorState.create({ doc: options.text, extensions: extensionsOf(options) }) });
 }
 
-function extensionsOf({ label, says, sayable, onEdit, onCaretLine, onSave, onFiles }: TextViewOptions): Extension {
+function extensionsOf({ label, says, sayable, onEdit, onCaretLine, onSave, onPicture }: TextViewOptions): Extension {
   return [
     history(), drawSelection(), highlightSpecialChars(), closeBrackets(), highlightSelectionMatches(),
     EditorView.lineWrapping, lessonLanguage, textLook, numbers.of([]), search({ top: true }), suggestions(sayable),
@@ -54,21 +54,19 @@ function extensionsOf({ label, says, sayable, onEdit, onCaretLine, onSave, onFil
       if (docChanged || selectionSet) onCaretLine(state.doc.lineAt(state.selection.main.head).number);
     }),
     EditorView.domEventHandlers({
-      drop: (event, view) => takesFiles(event, event.dataTransfer, view.posAtCoords({ x: event.clientX, y: event.clientY }) ?? view.state.selection.main.head, onFiles),
-      paste: (event, view) => takesFiles(event, event.clipboardData, view.state.selection.main.head, onFiles),
+      drop: (event, view) => takesFile(event, event.dataTransfer, view.posAtCoords({ x: event.clientX, y: event.clientY }) ?? view.state.selection.main.head, onPicture),
+      paste: (event, view) => takesFile(event, event.clipboardData, view.state.selection.main.head, onPicture),
     }),
   ];
 }
 
-function takesFiles(event: Event, data: DataTransfer | null, place: number, onFiles: TextViewOptions['onFiles']): boolean {
-  const files = [...(data?.files ?? [])];
-  if (files.length === 0 || !onFiles(files, place)) return false;
+/** A file becomes a picture, words stay words: what a page copies often has both, and then the words count. */
+function takesFile(event: Event, data: DataTransfer | null, place: number, onPicture: TextViewOptions['onPicture']): boolean {
+  const file = data?.files[0];
+  if (file === undefined || data?.types.includes('text/plain') === true) return false;
   event.preventDefault();
+  onPicture(file, place);
   return true;
-}
-
-export function textOf(view: EditorView): string {
-  return view.state.doc.toString();
 }
 
 /** Puts the focus into the field with `stretch` chosen and in sight. */

@@ -30,7 +30,7 @@ export function useTextView(box: RefObject<HTMLElement | null>, options: Omit<Te
         onEdit: () => given.current.options.onEdit(),
         onCaretLine: (line) => given.current.options.onCaretLine(line),
         onSave: () => given.current.options.onSave(),
-        onFiles: (files, place) => given.current.options.onFiles(files, place),
+        onPicture: (file, place) => given.current.options.onPicture(file, place),
       };
       const hadFocus = document.activeElement === area;
       const { selectionStart, selectionEnd } = area;

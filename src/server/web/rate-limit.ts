@@ -33,6 +33,8 @@ export const RATE_RULES = {
   spendLink: { name: 'spend-link', limit: 60, windowSeconds: 3_600 },
   checkout: { name: 'checkout', limit: 10, windowSeconds: 3_600 },
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
+  /** Pictures put into texts by one teacher. */
+  picture: { name: 'picture', limit: 120, windowSeconds: 3_600 },
   /** Videos begun by one teacher. */
   video: { name: 'video', limit: 60, windowSeconds: 3_600 },
   /** Drafts kept by themselves, of one teacher. */

@@ -19,10 +19,10 @@ const TEXTS = `
   UNION ALL
   SELECT d.public_id, NULL, d.written_at, u.name
     FROM earlier_drafts d JOIN lessons l ON l.id = d.lesson_id LEFT JOIN users u ON u.id = d.author_id
-   WHERE l.public_id = :lesson
+   WHERE l.public_id = :lesson AND BINARY d.source <> l.draft_source
    ORDER BY at DESC LIMIT 100`;
 
-/** The last hundred. `lesson` is a public id that the asker was allowed to see by lessonDesk. */
+/** The last hundred, without one that is the draft of now again. `lesson` is a public id that the asker was allowed to see by lessonDesk. */
 export async function lessonTexts(lesson: string): Promise<EarlierText[]> {
   return sequelize.query<EarlierText>(TEXTS, { replacements: { lesson }, type: QueryTypes.SELECT });
 }

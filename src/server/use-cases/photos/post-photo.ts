@@ -3,7 +3,8 @@ import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize, found } from '#server/errors.ts';
 import type { Context } from '#server/context.ts';
 import { displayName } from '#server/media/display-name.ts';
-import { takePhoto, type ReadPhoto } from '#server/media/photo.ts';
+import { keepingFilesOnlyWithRows } from '#server/media/only-with-rows.ts';
+import { takePhoto } from '#server/media/photo.ts';
 import { Enrolment, Media, ProgressPhoto } from '#server/models/index.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
@@ -39,7 +40,7 @@ export async function postPhoto(ctx: Context, input: PostPhotoInput): Promise<Pr
   await ctx.services.media.requireRoom();
   const publicId = newPublicId();
   const photo = await takePhoto(ctx.services.media, input.path, `photos/${publicId}`);
-  return keepingFilesOnlyWithRows(ctx, photo, () => withTransaction(async () => {
+  return keepingFilesOnlyWithRows(ctx.services.media, photo, () => withTransaction(async () => {
     found(await Enrolment.findByPk(seat.enrolmentId, { lock: true }));
     const waiting = await ProgressPhoto.count({ where: { enrolmentId: seat.enrolmentId, lessonId: part.id, verdict: 'waits' } });
     if (waiting >= MOST_WAITING) throw new AppError('CONFLICT', { says: `${waiting} photos of yours wait already. Your teacher looks at them first.` });
@@ -57,14 +58,4 @@ export async function postPhoto(ctx: Context, input: PostPhotoInput): Promise<Pr
     });
     return ProgressPhoto.create({ enrolmentId: seat.enrolmentId, lessonId: part.id, mediaId: media.id, words: input.words.slice(0, 1_000) });
   }));
-}
-
-/** Files are put before their row is made; when no row comes of it, they go again. */
-async function keepingFilesOnlyWithRows<T>(ctx: Context, { files }: ReadPhoto, work: () => Promise<T>): Promise<T> {
-  try {
-    return await work();
-  } catch (error) {
-    await Promise.all(Object.values(files).map(({ key }) => ctx.services.media.remove(key)));
-    throw error;
-  }
 }

@@ -19,7 +19,7 @@ export interface BodyLimit {
 
 /** The first line whose pattern fits counts. Files of people are the only large bodies; a phone in a studio may be slow. */
 export const BODY_LIMITS: readonly BodyLimit[] = [
-  { path: /^\/api\/(?:[a-z0-9/-]+\/)?photos?(?:\/|$)/, maxBytes: 30 * MIB, withinSeconds: 600 },
+  { path: /^\/api\/(?:[a-z0-9/-]+\/)?(?:photos?|pictures?)(?:\/|$)/, maxBytes: 30 * MIB, withinSeconds: 600 },
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?videos?(?:\/|$)/, maxBytes: 20 * MIB, withinSeconds: 600 },
   { path: /^\/(?:sign-in|sign-up|sign-out|forgotten|new-password|confirm|prove|account)(?:\/|$)/, maxBytes: 4 * KIB, withinSeconds: 30 },
   { path: /^\/api\/reckon$/, maxBytes: 64 * KIB, withinSeconds: 30 },
