@@ -7,7 +7,7 @@ import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
 
 const UNITS: Readonly<Record<WorkingUnit, string>> = {
   mm: 'mm', mm2: 'mm²', 'per-mm': 'to the mm', 'per-cm': 'to the cm', 'per-inch': 'to the inch', m: 'm', 'm-per-100g': 'm in 100 g', 'yd-per-lb': 'yd in a pound',
-  tex: 'tex', g: 'g', rad: 'rad', s: 's', h: 'h', 'per-hour': 'an hour', N: 'N', Pa: 'Pa', share: '', ratio: '', count: '',
+  tex: 'tex', g: 'g', l: 'l', 'l-per-kg': 'l for a kilogram', 'cm3-per-g': 'cm³ to the gram', percent: '%', rad: 'rad', s: 's', h: 'h', 'per-hour': 'an hour', N: 'N', Pa: 'Pa', share: '', ratio: '', count: '',
 };
 
 const MOST_LISTED = 12;

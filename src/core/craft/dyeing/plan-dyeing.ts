@@ -15,13 +15,13 @@ const AGENTS = ['alum', 'aluminium-acetate', 'none'] as const;
 const REFUSED = /copper|chrom|tin\b|dichromate|stannous/i;
 
 /** Per cent of the dry fibre, as practice and published recipes have it. */
-const USUAL = { alum: 15, tartar: 6, 'aluminium-acetate': 8, tannin: 8, iron: 2 } as const;
+export const USUAL = { alum: 15, tartar: 6, 'aluminium-acetate': 8, tannin: 8, iron: 2 } as const;
 const HIGH_PERCENT = 30;
 const IRON_HARMS_PERCENT = 4;
 /** Common practice: litres a kilogram. */
-const LIQUOR_RATIO = 30;
+export const LIQUOR_RATIO = 30;
 /** Common practice: hands at work in a bath, without the hours in which it stands. */
-const HOURS_A_BATH = 0.75;
+export const HOURS_A_BATH = 0.75;
 
 const percentRule = (name: string, max: number): NumberRule => ({ name, min: 'over-zero', max });
 
@@ -53,7 +53,7 @@ function readPercent(fields: Fields, key: 'tartar' | 'tannin' | 'iron', name: st
   return percent;
 }
 
-interface Dyeing {
+export interface Dyeing {
   readonly fibre: DyePiece['fibre'];
   readonly percents: Readonly<Partial<Record<DyeAgent, number>>>;
   readonly mordant: DyePiece['mordant']['agent'];
@@ -107,9 +107,12 @@ const pathOf = (agent: string): string => (agent === 'alum' || agent === 'alumin
 
 /** Reads a dyeing and reckons it; undefined, with a problem among the findings, if it cannot be done. */
 export function planDyeing(fields: Fields): Omit<DyePlan, 'warnings'> | undefined {
-  const read = readDyeing(fields);
-  if (read === undefined) return undefined;
-  const { fibre: { massG }, percents, liquorRatio } = read;
+  const dyeing = readDyeing(fields);
+  return dyeing && reckonDyeing(dyeing);
+}
+
+/** The plan of a dyeing that has been read. */
+export function reckonDyeing({ fibre: { massG }, percents, liquorRatio }: Dyeing): Omit<DyePlan, 'warnings'> {
   const litres = bathLitres(massG, liquorRatio);
   const bath = (step: DyeStep['step'], ...agents: DyeAgent[]): DyeStep[] => {
     const used = agents.flatMap((agent) => {

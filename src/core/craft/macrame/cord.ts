@@ -65,7 +65,7 @@ export function gatheringCord(wraps: number, bundleMm: number, cordMm: number, t
 }
 
 /** Specific volume in cm³/g of twisted cotton cord: 4 mm weighs about 9 g a metre. */
-const CORD_VOLUME = 1.4;
+export const CORD_VOLUME = 1.4;
 
 /** The tex of a cord of which only the thickness is known: the circle of its section over its specific volume. */
 export function texFromDiameter(cordMm: number): number {

@@ -16,9 +16,9 @@ import { LONGEST_MM } from '#core/craft/techniques/read-rules.ts';
 import { massOf } from '#core/craft/yarn/thread.ts';
 
 /** Common practice, no source: knots an hour of a steady hand, cords cut and hung, and drawing level at the end. */
-const KNOTTING_PACE = { knotsPerHour: 60, hitchesPerHour: 90, cordsPerHour: 20, gatheringHours: 0.15, finishingHours: 0.5 } as const;
+export const KNOTTING_PACE = { knotsPerHour: 60, hitchesPerHour: 90, cordsPerHour: 20, gatheringHours: 0.15, finishingHours: 0.5 } as const;
 /** Common practice: tails of a gathering cord, each. */
-const GATHERING_TAIL_MM = 100;
+export const GATHERING_TAIL_MM = 100;
 /** The rule of practice and the sum of the knots may differ by this factor before it is worth a word. */
 const RULE_AGREES_WITHIN = 1.5;
 /** Ends hang this many diameters apart. */
@@ -185,11 +185,15 @@ function widthOf(hung: readonly Hung[]): number {
 
 /** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be knotted. */
 export function planMacrame(fields: Fields): Omit<MacramePlan, 'warnings'> | undefined {
-  const { findings } = fields;
   const parts = readPiece(fields);
-  const hung = parts?.columns.flatMap((column) => hang(column, parts) ?? []);
-  const [first] = hung ?? [];
-  if (parts === undefined || hung === undefined || first === undefined) return undefined;
+  return parts && reckonMacrame(parts, fields.findings);
+}
+
+/** The plan of a piece that has been read; undefined, with a problem among the findings, if it cannot be knotted. */
+export function reckonMacrame(parts: PieceParts, findings: Findings): Omit<MacramePlan, 'warnings'> | undefined {
+  const hung = parts.columns.flatMap((column) => hang(column, parts) ?? []);
+  const [first] = hung;
+  if (first === undefined) return undefined;
   const ends = sumOf(hung, (column) => column.ends);
   const foot = parts.foot.map((section) => planSection(section, { ends, cord: first.cord, parts }));
   const longestMm = Math.max(...hung.map(({ heightMm }) => heightMm));

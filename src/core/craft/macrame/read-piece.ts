@@ -18,6 +18,8 @@ export interface KnownCord {
   readonly diameterMm: number;
   readonly tex: number;
   readonly ball?: Yarn['ball'];
+  /** Where it was told by its grist. */
+  readonly yarn?: Yarn;
 }
 
 export interface PieceParts {
@@ -33,7 +35,7 @@ export interface PieceParts {
 const MOST = { columns: 60, sections: 60, ends: 400, knots: 10_000 } as const;
 const ROLE = /^[a-z][a-z0-9-]{0,39}$/i;
 const NAME = /^[a-z0-9-]{1,40}$/;
-const TAIL_MM = 50;
+export const TAIL_MM = 50;
 const length = (name: string, max: number = LONGEST_MM): NumberRule => ({ name, min: 'over-zero', max, unit: 'mm' });
 const count = (name: string, max: number): NumberRule => ({ name, min: 1, max, whole: true });
 const GAP: NumberRule = { name: 'Bare cord between knots', min: 0, max: 1000, unit: 'mm' };
@@ -58,7 +60,7 @@ function readCord(fields: Fields): KnownCord | undefined {
     const yarn = readYarn(fields);
     if (yarn === undefined) return undefined;
     const { tex, compressedMm, strands } = threadOf(yarn, ASHENHURST_K.warp);
-    return { diameterMm: compressedMm, tex: tex * strands, ...present({ label: yarn.label, colour: yarn.colour, ball: yarn.ball }) };
+    return { yarn, diameterMm: compressedMm, tex: tex * strands, ...present({ label: yarn.label, colour: yarn.colour, ball: yarn.ball }) };
   }
   return fields.findings.soundly(() => {
     const diameterMm = fields.number('diameterMm', { name: 'Thickness of the cord', min: 0.5, max: 60, unit: 'mm' });

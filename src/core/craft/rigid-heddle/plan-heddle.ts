@@ -17,9 +17,9 @@ import { readYarn } from '#core/craft/yarn/read-yarn.ts';
 import { massOf, threadOf, type Thread } from '#core/craft/yarn/thread.ts';
 
 /** Loom waste: one loom maker's 24 in. Take-up and shrinkage: common practice where nothing is known. */
-const USUAL = { drawIn: 0.08, widthShrinkage: 0.1, lengthShrinkage: 0.1, takeUp: 0.1, fringeMm: 0, gapMm: 0, wasteMm: 610, margin: DEFAULT_ALLOWANCES.marginWeft.swatch } as const;
+export const USUAL = { drawIn: 0.08, widthShrinkage: 0.1, lengthShrinkage: 0.1, takeUp: 0.1, fringeMm: 0, gapMm: 0, wasteMm: 610, margin: DEFAULT_ALLOWANCES.marginWeft.swatch } as const;
 /** The margin of the warp is in its waste already; this is for slips of the hand. */
-type Allowances = { readonly [K in keyof typeof USUAL]: number };
+export type Allowances = { readonly [K in keyof typeof USUAL]: number };
 
 export const HEDDLE_CAUTIONS: readonly Caution[] = [{
   title: 'Hands, back, and long ends',
@@ -47,7 +47,7 @@ function readAllowances(fields: Fields): Allowances {
   return { ...USUAL, ...given };
 }
 
-interface Parts {
+export interface Parts {
   readonly size: HeddlePiece['size'];
   readonly heddle: HeddlePiece['heddle'];
   readonly warp: Yarn;
@@ -85,8 +85,12 @@ function toBuy(netMm: number, yarn: Yarn, { tex, strands }: Thread, margin: numb
   return yarn.ball === undefined ? plan : { ...plan, balls: ballsFor(withMarginMm, yarn.ball.metres).count };
 }
 
-function crossings({ heddle, picksPerCm }: Parts, warp: Thread, weft: Thread, findings: Findings): PickGeometry | undefined {
-  const geometry = pickGeometry({ spacingMm: heddle.spacingMm, warpDiameterMm: warp.compressedMm, weftDiameterMm: weft.compressedMm, pickSpacingMm: 10 / picksPerCm, mode: 'balanced' });
+/** How warp and weft cross; undefined where they jam. */
+export function crossing({ heddle, picksPerCm }: Parts, warp: Thread, weft: Thread): PickGeometry | undefined {
+  return pickGeometry({ spacingMm: heddle.spacingMm, warpDiameterMm: warp.compressedMm, weftDiameterMm: weft.compressedMm, pickSpacingMm: 10 / picksPerCm, mode: 'balanced' });
+}
+
+function checkCrossing(geometry: PickGeometry | undefined, findings: Findings): PickGeometry | undefined {
   if (geometry === undefined) findings.reject('E_JAM', '/picksPerCm', 'Yarns this thick cannot lie so close. Fewer rows in a centimetre, a coarser heddle or thinner yarn works.');
   if (geometry?.clamped === true) findings.warn('W_CLAMPED', '/picksPerCm', 'Warp and weft cannot bend alike in so close a cloth. The nearest that is possible is reckoned.');
   return geometry;
@@ -104,13 +108,16 @@ function endsIn({ size, heddle, allowances: { drawIn, widthShrinkage } }: Parts,
 
 /** Reads a piece and reckons it; undefined, with a problem among the findings, if it cannot be woven. */
 export function planHeddle(fields: Fields): Omit<HeddlePlan, 'warnings'> | undefined {
-  const { findings } = fields;
   const parts = readHeddlePiece(fields);
-  if (parts === undefined) return undefined;
+  return parts && reckonHeddle(parts, fields.findings);
+}
+
+/** The plan of a piece that has been read; undefined, with a problem among the findings, if it cannot be woven. */
+export function reckonHeddle(parts: Parts, findings: Findings): Omit<HeddlePlan, 'warnings'> | undefined {
   const { size, pieces, picksPerCm, allowances } = parts;
   const ends = endsIn(parts, findings);
   const [warp, weft] = [threadOf(parts.warp, ASHENHURST_K.warp), threadOf(parts.weft, ASHENHURST_K.warp)];
-  const laid = crossings(parts, warp, weft, findings);
+  const laid = checkCrossing(crossing(parts, warp, weft), findings);
   if (findings.count > 0 || ends === undefined || laid === undefined) return undefined;
   const warpEndMm = (pieces * size.lengthMm) / ((1 - allowances.lengthShrinkage) * (1 - allowances.takeUp)) + (pieces - 1) * allowances.gapMm + allowances.fringeMm + allowances.wasteMm;
   const picks = pieces * roundHalfUp((size.lengthMm / 10) * picksPerCm);

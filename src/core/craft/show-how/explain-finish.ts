@@ -9,6 +9,8 @@ import type { DressedWorkings, ToldBand } from '#core/craft/show-how/bands/band.
 import type { NotedBand } from '#core/craft/show-how/explain-bands.ts';
 import { asWound } from '#core/craft/show-how/explain-warp.ts';
 import { from, given, standing, sumOf, WEIGHS_NOTHING, type Standing } from '#core/craft/show-how/notebook.ts';
+import { noteHoursInAll, pace } from '#core/craft/show-how/note-hours.ts';
+import { noteLeastRod } from '#core/craft/show-how/note-rod.ts';
 import { DEFAULTS, RULES } from '#core/craft/show-how/sources.ts';
 import type { Working, WorkingInput, WorkingUnit } from '#core/craft/show-how/working.ts';
 import { hoursByWork, secondsPerRow } from '#core/craft/time.ts';
@@ -20,9 +22,6 @@ function noteCard({ book, warp }: DressedWorkings, { cut: { spacerCard } }: Fram
   book.note({ id: 'cut.spacerCard.widthMm', name: 'width of the spacer card', formula: 'w + x', inputs: [from('w', warp.woundWidth), extra], value: spacerCard.widthMm, unit: 'mm', ...RULES.arithmetic });
   book.note({ id: 'cut.spacerCard.heightMm', name: 'height of the spacer card', formula: 'b', inputs: [from('b', warp.bottom)], value: spacerCard.heightMm, unit: 'mm', ...RULES.loom });
 }
-
-/** The sag of 5mgL³/(384EI) with I = πd⁴/64, solved for d. */
-const LEAST_DOWEL = '1000 * (64 / pi * 5 * (m / 1000 * 9.80665) * (s / 1000)^2 * q / (384 * E))^(1 / 4)';
 
 /** Wraps through the cloth's edge, one at each selvedge, with yarn as thick as the warp. */
 function noteLashing({ book, piece, warp }: DressedWorkings, dowel: Dowel, lashingMm: number): void {
@@ -47,11 +46,7 @@ function noteHanging(on: DressedWorkings, { cut, massG }: FrameLoomPlan, mass: W
     value: cordSpan(cut.dowel.lengthMm), unit: 'mm', ...RULES.arithmetic,
   });
   const [s, rise] = [from('s', span), rule('v', 'how high the cord rises', HANGING.cordRiseMm, 'mm', DEFAULTS.cord)];
-  book.note({
-    id: 'cut.dowel.minDiameterMm', name: 'thinnest dowel that does not sag', formula: LEAST_DOWEL,
-    inputs: [from('m', mass), s, standing({ symbol: 'q', name: 'span over sag', value: HANGING.sagLimit, unit: 'ratio' }, DEFAULTS.sagLimit), standing({ symbol: 'E', name: 'stiffness of the wood', value: HANGING.modulusPa, unit: 'Pa' }, DEFAULTS.modulus)],
-    value: cut.dowel.minDiameterMm, unit: 'mm', ...RULES.beam,
-  });
+  noteLeastRod(book, 'cut.dowel.minDiameterMm', 'thinnest dowel that does not sag', mass, s, cut.dowel.minDiameterMm);
   book.note({
     id: 'cut.cordMm', name: 'hanging cord', formula: '2 * hypot(s / 2, v) + 2 * k', inputs: [s, rise, rule('k', 'cord of one knot', HANGING.cordKnotMm, 'mm', DEFAULTS.cord)], value: cut.cordMm, unit: 'mm', ...RULES.euclid,
   });
@@ -77,7 +72,6 @@ function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: read
   const { book, warp, piece } = on;
   const work = workOf(woven, piece);
   const hours = hoursByWork(work);
-  const pace = (symbol: string, name: string, value: number, unit: WorkingUnit = 'per-hour', source: Standing = DEFAULTS.pace): WorkingInput => standing({ symbol, name, value, unit }, source);
   const note = (id: keyof typeof hours, name: string, formula: string, inputs: readonly WorkingInput[]): WorkingInput =>
     from(id, book.note({ id: `hours.${id}`, name, formula, inputs, value: hours[id], unit: 'h', ...RULES.pace }));
   const row = book.note({
@@ -94,10 +88,7 @@ function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: read
     note('warping', 'hours of warping', 'E / v', [asWound('E', warp.count), pace('v', 'ends in an hour', PACE.warpEndsPerHour)]),
     note('finishing', 'hours of finishing', 'f', [pace('f', 'hours of finishing', PACE.finishingHours, 'h')]),
   ];
-  const likely = book.note({ id: 'hours.likely', name: 'hours of work', formula: sumOf(parts), inputs: parts, value: plan.hours.likely, unit: 'h', ...RULES.arithmetic });
-  for (const [id, factor, words] of [['low', PACE.lowFactor, 'a quick hand'], ['high', PACE.highFactor, 'a slow hand']] as const) {
-    book.note({ id: `hours.${id}`, name: `hours of work, ${words}`, formula: 'h * k', inputs: [from('h', likely), pace('k', `share that ${words} takes`, factor, 'ratio')], value: plan.hours[id], unit: 'h', ...RULES.pace });
-  }
+  noteHoursInAll(book, plan.hours, sumOf(parts), parts);
 }
 
 export function noteFinish(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan, masses: readonly Working[]): void {

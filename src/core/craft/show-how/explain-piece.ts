@@ -1,4 +1,4 @@
-/** The workings of a whole piece, in the order in which one number needs the other. */
+/** The workings of a piece woven on a frame, in the order in which one number needs the other. */
 import { addUp, mainWeft, weaveBands } from '#core/craft/frame-loom/add-up.ts';
 import { putOnLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
@@ -24,7 +24,7 @@ function noteRawPicks({ book, piece, weft }: DressedWorkings, plan: Omit<FrameLo
   book.note({ id: 'weft.rawPicks', name: 'rows of the main weft before rounding', formula: sumOf(inputs), inputs, value: plan.weft.rawPicks, unit: 'ratio', ...RULES.arithmetic });
 }
 
-export function notePiece(book: Notebook, fields: Fields): boolean {
+export function noteFrameLoom(book: Notebook, fields: Fields): boolean {
   fields.choice('craft', 'Craft', ['frame-loom']);
   const piece = putOnLoom(fields);
   if (piece === undefined) return false;

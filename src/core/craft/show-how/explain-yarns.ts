@@ -2,17 +2,17 @@
 import type { WovenBand } from '#core/craft/frame-loom/add-up.ts';
 import { loadsFor, mainRow, strandsOnShuttle } from '#core/craft/frame-loom/count-yarn.ts';
 import type { Yarn } from '#core/craft/piece.ts';
-import type { FrameLoomPlan, WarpPlan } from '#core/craft/plan-types.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { combinedUncertainty, CUT_STRANDS_MARGIN, marginFor, UNCERTAINTIES, type Uncertainties } from '#core/craft/purchase.ts';
 import { below } from '#core/craft/reading/findings.ts';
 import type { DressedWorkings, ToldUse } from '#core/craft/show-how/bands/band.ts';
 import type { NotedBand } from '#core/craft/show-how/explain-bands.ts';
 import { ofRole } from '#core/craft/show-how/explain-weft.ts';
-import { from, given, standing, sumOf, WEIGHS_NOTHING } from '#core/craft/show-how/notebook.ts';
+import { noteBought } from '#core/craft/show-how/note-bought.ts';
+import { from, standing, sumOf, WEIGHS_NOTHING } from '#core/craft/show-how/notebook.ts';
 import { setting } from '#core/craft/show-how/on-loom.ts';
 import { DEFAULTS, RULES } from '#core/craft/show-how/sources.ts';
 import type { Working, WorkingInput } from '#core/craft/show-how/working.ts';
-import { massOf } from '#core/craft/yarn/thread.ts';
 
 interface PlacedUse extends ToldUse {
   readonly index: number;
@@ -94,32 +94,6 @@ function noteMargin(on: DressedWorkings, role: string, uses: readonly PlacedUse[
   }).value;
 }
 
-interface Bought {
-  /** `warp` or `yarns.A` */
-  readonly id: string;
-  readonly path: string;
-  readonly yarn: Yarn;
-  readonly net: Working;
-  readonly tex: Working;
-  readonly margin: WorkingInput;
-  readonly plan: WarpPlan;
-}
-
-/** Length with margin, both masses, balls; answers the working of the net mass. */
-function noteBought({ book }: DressedWorkings, { id, path, yarn, net, tex, margin, plan }: Bought): Working {
-  const length = book.note({
-    id: `${id}.withMarginMm`, name: 'yarn to have in hand', formula: 'L * (1 + M)', inputs: [from('L', net), margin], value: plan.withMarginMm, unit: 'mm', ...RULES.margins,
-  });
-  const mass = (key: string, name: string, of: Working, value: number): Working =>
-    book.note({ id: `${id}.${key}`, name, formula: 'L / 1e6 * T', inputs: [from('L', of), from('T', tex)], value, unit: 'g', ...RULES.yarnNumbers });
-  mass('withMarginG', 'mass of the yarn to have in hand', length, massOf(plan.withMarginMm, tex.value));
-  if (plan.balls !== undefined && yarn.ball !== undefined) {
-    const metres = given({ symbol: 'b', name: 'metres in a ball', value: yarn.ball.metres, unit: 'm' }, `${path}/ball/metres`, 'label');
-    book.note({ id: `${id}.balls`, name: 'balls to buy', formula: 'ceil(L / (1000 * b) - 1e-9)', inputs: [from('L', length), metres], value: plan.balls, unit: 'count', ...RULES.wholeNumbers });
-  }
-  return mass('massG', 'mass of the yarn in the piece', net, plan.massG);
-}
-
 function noteYarn(on: DressedWorkings, role: string, yarn: Yarn, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan): Working {
   const uses = bands.flatMap(({ index, uses: own }) => own.filter((use) => use.role === role).map((use) => ({ ...use, index })));
   const own = plan.yarns[role];
@@ -142,14 +116,14 @@ function noteYarn(on: DressedWorkings, role: string, yarn: Yarn, bands: readonly
   const net = on.book.note({
     id: `yarns.${role}.netMm`, name: 'yarn in the piece, without margin', formula: 'b + t', inputs: [from('b', inBands), from('t', tails)], value: own.netMm, unit: 'mm', ...RULES.arithmetic, margin,
   });
-  return noteBought(on, { id: `yarns.${role}`, path: below('/yarns', role), yarn, net, tex, margin: setting(on, 'M', 'marginWeft', WEIGHS_NOTHING), plan: own });
+  return noteBought(on.book, { id: `yarns.${role}`, path: below('/yarns', role), ball: yarn.ball, net, tex, margin: setting(on, 'M', 'marginWeft', WEIGHS_NOTHING), plan: own });
 }
 
 /** Warp and every yarn; answers the workings of their masses in the piece. */
 export function noteYarns(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan): readonly Working[] {
   const { warp, piece } = on;
-  const masses = [noteBought(on, {
-    id: 'warp', path: '/warp/yarn', yarn: piece.warp.yarn, net: warp.net, tex: warp.thread.tex, margin: setting(on, 'M', 'marginWarp', WEIGHS_NOTHING), plan: plan.warp,
+  const masses = [noteBought(on.book, {
+    id: 'warp', path: '/warp/yarn', ball: piece.warp.yarn.ball, net: warp.net, tex: warp.thread.tex, margin: setting(on, 'M', 'marginWarp', WEIGHS_NOTHING), plan: plan.warp,
   })];
   for (const [role, yarn] of piece.yarns) {
     if (yarn !== undefined) masses.push(noteYarn(on, role, yarn, bands, woven, plan));

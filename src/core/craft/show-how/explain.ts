@@ -9,7 +9,7 @@
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
-import { notePiece } from '#core/craft/show-how/explain-piece.ts';
+import { notePiece } from '#core/craft/show-how/explainers.ts';
 import { noteRya, noteShapeQuestion, noteSoumak, noteTakeUp } from '#core/craft/show-how/explain-questions.ts';
 import { noteCounts, notePlies, noteThread } from '#core/craft/show-how/explain-thread.ts';
 import { Notebook } from '#core/craft/show-how/notebook.ts';
@@ -61,7 +61,7 @@ export const explainRya = explainQuestion(noteRya);
 export const explainShape = explainQuestion(noteShapeQuestion);
 
 /**
- * The workings of a whole piece. Ids are paths in the plan where it has the number
+ * The workings of a whole piece of any craft. Ids are paths in the plan where it has the number
  * (`ends.count`, `weft.pickMm`, `yarns.A.netMm`, `bands.3.cutMm`), and lie beside these
  * where it has not. Problems and warnings are those of the plan.
  */
