@@ -21,8 +21,8 @@ export const CueRow = memo(function CueRow({ line: { key, fromMs, toMs, words },
   const id = `cue-${key}`;
   return (
     <li data-key={key} className={isInHand ? 'in-hand' : undefined} aria-current={isPlaying || undefined}>
-      <button type="button" className="cue-time" onClick={() => { tell({ kind: 'choose', key }); jump(fromMs); }} aria-label={`Play from ${tenths(fromMs)}`}>
-        <span>{tenths(fromMs)}</span><span className="quiet">{tenths(toMs)}</span>
+      <button type="button" className="cue-time" onClick={() => { tell({ kind: 'choose', key }); jump(fromMs); }}>
+        <span><span className="hide">Play from </span>{tenths(fromMs)}</span><span className="quiet"><span className="hide"> to </span>{tenths(toMs)}</span>
       </button>
       <textarea id={id} rows={2} value={words} maxLength={500} aria-label={`Words from ${tenths(fromMs)} to ${tenths(toMs)}`} aria-invalid={fault !== undefined || undefined} aria-describedby={fault === undefined ? undefined : `${id}-wrong`} onFocus={() => tell({ kind: 'choose', key })} onChange={(event) => tell({ kind: 'write', key, words: event.currentTarget.value })} />
       <IconButton glyph="takeOut" small label={`Take out the line at ${tenths(fromMs)}`} onClick={() => tell({ kind: 'take-out', key })} />

@@ -69,7 +69,7 @@ export function FilmPlayer({ title, src, type, durationMs, poster, captions, cha
   };
   const nextRate = RATES[(RATES.findIndex((rate) => rate === film.rate) + 1) % RATES.length] ?? 1;
   return (
-    <div className="lesson-video">
+    <>
       <figure ref={figure} className="video bleeds" aria-label={`Video: ${title}`} onKeyDown={live ? onKeyDown : undefined}>
         <div className="still">
           <video ref={element} controls={!live} preload="metadata" playsInline poster={poster} tabIndex={live ? 0 : undefined} aria-label={title} onClick={live ? toggle : undefined}>
@@ -97,6 +97,6 @@ export function FilmPlayer({ title, src, type, durationMs, poster, captions, cha
         </ol>
       )}
       {cues.length > 0 && <Transcript cues={cues} chapters={chapters} atMs={live ? film.atMs : null} isPlaying={film.isPlaying} onJump={begin} />}
-    </div>
+    </>
   );
 }
