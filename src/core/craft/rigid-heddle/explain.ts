@@ -68,10 +68,11 @@ function notePick(on: On, geometry: PickGeometry, count: Working, warp: ThreadWo
   const sum = book.note({ id: 'weft.diameterSumMm', name: 'warp and weft together', formula: 'd1 + d2', inputs: [from('d1', warp.compressed), from('d2', weft.compressed)], value: geometry.diameterSumMm, unit: 'mm', ...RULES.arithmetic });
   const D = from('D', sum);
   const range = weftWaveRange(geometry.diameterSumMm, on.parts.heddle.spacingMm, geometry.pickSpacingMm);
-  if (range === undefined) throw new Error('picks that jam were laid');
+  const { bend } = geometry;
+  if (range === undefined || bend === undefined) throw new Error('picks that jam were laid');
   const { min, max } = noteWaveRange(book, { min: 'weft.leastWaveMm', max: 'weft.mostWaveMm' }, { D, p1: { ...spacingIn(on), symbol: 'p1' }, p2: from('p2', rows) }, range);
-  const wave = book.note({ id: 'weft.waveMm', name: 'wave of the weft', formula: 'min(b, max(a, D / 2))', inputs: [from('a', min), from('b', max), D], value: geometry.waveMm, unit: 'mm', ...RULES.peirce });
-  const step = noteBend(book, { prefix: 'weft.', of: 'weft', lengthId: 'stepMm', spacing: spacingIn(on), D, wave: from('h', wave), lengthMm: geometry.stepMm, angleRad: geometry.angleRad, crimp: geometry.crimp });
+  const wave = book.note({ id: 'weft.waveMm', name: 'wave of the weft', formula: 'min(b, max(a, D / 2))', inputs: [from('a', min), from('b', max), D], value: bend.waveMm, unit: 'mm', ...RULES.peirce });
+  const { length: step } = noteBend(book, { prefix: 'weft.', of: 'weft', lengthId: 'stepMm', spacing: spacingIn(on), D, wave: from('h', wave), lengthMm: geometry.stepMm, angleRad: bend.angleRad, crimp: geometry.crimp });
   const turn = book.note({ id: 'weft.turnMm', name: 'weft round the end at a selvedge', formula: 'hypot(pi * D / 2, p2)', inputs: [D, from('p2', rows)], value: geometry.turnMm, unit: 'mm', ...RULES.turn });
   return book.note({
     id: 'weft.pickMm', name: 'weft of one row, its turn included', formula: '(E - 1) * l + t', inputs: [from('E', count, WEIGHS_NOTHING), from('l', step), from('t', turn)], value: plan.weft.pickMm, unit: 'mm', ...RULES.peirce,
