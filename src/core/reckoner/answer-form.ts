@@ -49,8 +49,11 @@ function orFailed<S extends Section>(answer: () => S): S | Section {
 function tellOnce(sections: Omit<ReckonerAnswer, 'errors'>): Omit<ReckonerAnswer, 'errors'> {
   const told = new Set<string>();
   const once = <S extends Section>(section: S): S => {
-    const notes = section.notes.filter((note) => !told.has(note));
-    for (const note of notes) told.add(note);
+    const notes = section.notes.filter(({ message }) => {
+      const isNew = !told.has(message);
+      told.add(message);
+      return isNew;
+    });
     return { ...section, notes };
   };
   return {

@@ -2,6 +2,7 @@
 import type { Input } from '#core/craft/amounts/amount-types.ts';
 import type { Working } from '#core/craft/show-how/working.ts';
 import type { Trust } from '#core/craft/trust.ts';
+import type { Problem } from '#core/outcome.ts';
 import type { Outcome } from '#core/outcome.ts';
 import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
 
@@ -23,7 +24,7 @@ export type FieldErrors = Partial<Record<ReckonerField, string>>;
 export interface Section {
   readonly lines: readonly AnswerLine[];
   /** What is worth knowing about the answer. */
-  readonly notes: readonly string[];
+  readonly notes: readonly Problem[];
   /** Fields it cannot answer without. */
   readonly needs: readonly ReckonerField[];
   /** Every step of the reckoning, for who asks to see it. */

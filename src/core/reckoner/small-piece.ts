@@ -2,6 +2,7 @@
 import { planPiece } from '#core/craft/plan.ts';
 import type { Band, Dowel, FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
+import type { Problem } from '#core/outcome.ts';
 import { fieldOfPath, type FieldsOfKeys } from '#core/reckoner/field-of-path.ts';
 import type { FormReader } from '#core/reckoner/form-reader.ts';
 import type { TypedLoom, TypedRows } from '#core/reckoner/read-fields.ts';
@@ -31,7 +32,7 @@ export interface Making {
 export interface Made {
   readonly piece: FrameLoomPiece;
   readonly plan: FrameLoomPlan;
-  readonly notes: readonly string[];
+  readonly notes: readonly Problem[];
 }
 
 function pieceOf({ yarn, loom, rows }: Cloth, { bands, yarns = {}, heightMm = rows.heightMm, frame, dowel }: Making): FrameLoomPiece {
@@ -53,7 +54,7 @@ function pieceOf({ yarn, loom, rows }: Cloth, { bands, yarns = {}, heightMm = ro
 export function makePiece(cloth: Cloth, making: Making, reader: FormReader, ofBand: FieldsOfKeys = {}): Made | undefined {
   const piece = pieceOf(cloth, making);
   const planned = planPiece(piece, reader.units);
-  if (planned.ok) return { piece, plan: planned.value, notes: [...new Set(planned.warnings.map(({ message }) => message))] };
+  if (planned.ok) return { piece, plan: planned.value, notes: planned.warnings };
   for (const { path, message } of planned.problems) reader.refuse(fieldOfPath(path, ofBand), message);
   return undefined;
 }

@@ -8,6 +8,7 @@ import type { Units } from '#core/units/units.ts';
 import { stepsBetween } from '#core/reckoner/step-words.ts';
 import { Fold, ShowHow, Step, stepAnchor, type Steps } from '#islands/reckoner/ShowHow.tsx';
 import { fieldId } from '#islands/ui/field-id.ts';
+import { Findings } from '#islands/ui/Findings.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 
 /** Stands in for an answer that waits, with the way to every field it waits for. */
@@ -114,9 +115,9 @@ export const Answers = memo(function Answers({ part, caption, section, errors, u
   return (
     <>
       {section.notes.length > 0 && (
-        <ul className="mb-4 grid gap-2">
-          {section.notes.map((note) => <li key={note} className="border-l-2 border-ink pl-3">{note}</li>)}
-        </ul>
+        <div className="mb-4 border-l-2 border-ink pl-3">
+          <Findings found={section.notes.map(({ code, message }) => ({ code, says: message }))} />
+        </div>
       )}
       <Loud lines={loud} units={units} steps={steps} />
       {rest.length > 0 && <Rows caption={caption} lines={rest} units={units} steps={steps} />}

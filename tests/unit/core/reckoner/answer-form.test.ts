@@ -36,7 +36,7 @@ describe.each(['cm', 'in'] as const)('at first, in %s', (units) => {
   });
 
   test('a note is told once on the page', () => {
-    const notes = PARTS.flatMap((part) => answer[part].notes);
+    const notes = PARTS.flatMap((part) => answer[part].notes.map(({ message }) => message));
     expect(new Set(notes).size).toBe(notes.length);
   });
 });
