@@ -160,11 +160,11 @@ describe('what to gather', () => {
     const made = madeAsPattern(pattern);
     if (made === null) throw new Error('the demo piece cannot be reckoned');
     render(<><ToGather made={made} units="cm" own={false} lines={lines} /><Trial typed={MAUDS} /></>);
-    expect(plain(screen.getByText(/^For the pattern’s/).textContent)).toBe('For the pattern’s 40 cm, with a margin.');
+    expect(plain(screen.getByText(/^For the pattern’s/).textContent)).toBe('For the pattern’s piece, 40 cm wide and 44 cm high, without its fringe, with a margin.');
     expect(plain(screen.getByRole('row', { name: /Slack Water/ }).textContent)).toBe('Fenwool 6/2 Slack Water119 m40 g');
     expect(plain(screen.getByText('Shed stick', { selector: 'span' }).closest('li')?.textContent)).toBe('Shed stick41 cm');
     await userEvent.click(screen.getByRole('link', { name: 'See it so' }));
-    expect(plain(screen.getByText(/^For your/).textContent)).toBe('For your 31 cm, with a margin.');
+    expect(plain(screen.getByText(/^For your/).textContent)).toBe('For your own piece, 31 cm wide and 44 cm high, without its fringe, with a margin.');
     expect(plain(screen.getByRole('row', { name: /Slack Water/ }).textContent)).not.toContain('119 m');
     expect(plain(screen.getByText('Corks', { selector: 'span' }).closest('li')?.textContent)).toBe('Corks4');
   });
