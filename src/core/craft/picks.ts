@@ -137,8 +137,3 @@ export function rowsPerLoad(loadMm: number, rowMm: number): number {
 export function butterflyLength(eights: number, spanMm: number): number {
   return 2 * eights * spanMm;
 }
-
-/** Yarn on a stick shuttle wound so many times round. */
-export function stickShuttleLength(turns: number, notchDistanceMm: number, thicknessMm: number): number {
-  return turns * 2 * (notchDistanceMm + thicknessMm);
-}

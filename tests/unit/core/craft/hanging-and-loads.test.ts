@@ -1,7 +1,7 @@
 import { describe, expect, test } from 'vitest';
 import { bundleDiameter, cordLength, dowelLength, endsForFringe, endsForTwistedFringe, lashingLength, leastDowelDiameter, overhandKnot } from '#core/craft/hanging.ts';
 import { nailsOnRail, nailsUsed, railNeeded } from '#core/craft/nails.ts';
-import { butterflyLength, rowsPerLoad, stickShuttleLength } from '#core/craft/picks.ts';
+import { butterflyLength, rowsPerLoad } from '#core/craft/picks.ts';
 import { marginFor, UNCERTAINTIES, ballsFor } from '#core/craft/purchase.ts';
 import { slopeAngle } from '#core/craft/shapes.ts';
 import { hoursOf, NO_WORK } from '#core/craft/time.ts';
@@ -36,10 +36,6 @@ describe('filling a shuttle', () => {
   test('25 figure-eights over a hand of 16 cm hold 8 m, 24 rows of 328 mm', () => {
     expect(butterflyLength(25, 160)).toBe(8000);
     expect(rowsPerLoad(8000, 328.4816)).toBe(24);
-  });
-
-  test('a stick shuttle holds its length there and back at every turn', () => {
-    expect(stickShuttleLength(20, 195, 5)).toBe(8000);
   });
 });
 

@@ -6,19 +6,26 @@ import { LEVEL, type Scene } from '#core/craft/figures/kit/scene.ts';
 import { stageOf, stages } from '#core/craft/figures/kit/stages.ts';
 import { layStrand, type Run } from '#core/craft/figures/kit/strand.ts';
 import { trail } from '#core/craft/figures/kit/trail.ts';
-import { countWords } from '#core/craft/figures/length-words.ts';
+import { countWords, lengthWords } from '#core/craft/figures/length-words.ts';
 import { techniqueColour } from '#core/craft/figures/yarns.ts';
+import { settingsOf } from '#core/craft/frame-loom/settings.ts';
+import { butterflyLength } from '#core/craft/picks.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import { ceilSafe } from '#core/craft/rounding.ts';
+import type { Units } from '#core/units/units.ts';
 
 const LEFT = 150;
 const RIGHT = 410;
 const Y = 122;
 const EIGHTS = 5;
+/** From thumb to little finger, spread: common practice, 15 to 20 cm. */
+const HAND_MM = 160;
 
 export const BUTTERFLY: Figure = {
   title: 'Butterfly',
   height: 250,
-  describe: ({ plan }) =>
-    `Yarn wound in figures of eight round thumb and little finger, taken off and tied twice round the waist. It is drawn from the end you began with. One weaves about ${countWords(rowsPerLoad(plan.yarns), 'row', 'rows')}.`,
+  describe: ({ piece, plan, units }) =>
+    `Yarn wound in figures of eight round thumb and little finger, taken off and tied twice round the waist. It is drawn from the end you began with. ${windWords(piece, units)} One weaves about ${countWords(rowsPerLoad(plan.yarns), 'row', 'rows')}.`,
   steps: () => [
     { weight: 5, words: 'Lay the end in the palm and wind figures of eight round thumb and little finger.' },
     { weight: 2, words: 'Take it off and tie the last end twice round the waist. Draw from the end you began with.' },
@@ -37,6 +44,12 @@ export const BUTTERFLY: Figure = {
     words(scene, 280, 36, 'tied at the waist', { anchor: 'middle', size: 17, quiet: true });
   },
 };
+
+/** `A hand that spans 16 cm winds 8 m in 25 of them.` */
+function windWords({ allowances = {}, mode = 'straight-warp', beat }: FrameLoomPiece, units: Units): string {
+  const { loadMm } = settingsOf(allowances, mode, beat);
+  return `A hand that spans ${lengthWords(HAND_MM, units, 'size')} winds ${lengthWords(loadMm, units, 'yarn')} in ${String(ceilSafe(loadMm / butterflyLength(1, HAND_MM)))} of them.`;
+}
 
 function rowsPerLoad(yarns: Readonly<Record<string, { readonly rowsPerLoad: number }>>): number {
   return Math.max(0, ...Object.values(yarns).map((yarn) => yarn.rowsPerLoad));

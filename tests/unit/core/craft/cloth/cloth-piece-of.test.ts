@@ -6,7 +6,7 @@ import { NEUTRAL } from '#core/craft/cloth/colour.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import { pieceOf, pieceWith, planOf } from '../a-piece.ts';
+import { PLAIN_PIECE, pieceOf, pieceWith, planOf } from '../a-piece.ts';
 
 const LOW_TIDE: FrameLoomPiece = JSON.parse(readFileSync(new URL('../../../../../content/series/low-tide/piece.json', import.meta.url), 'utf8'));
 
@@ -76,6 +76,25 @@ describe('a cloth from a described piece and its plan', () => {
     expect(band(own, 'rod')).toMatchObject({ loopMm: expect.closeTo(Math.PI * 4, 9) as number });
     expect(band(own, 'loops')).toMatchObject({ loopMm: 20, rows: 3 });
     expect(band(own, 'twine')).toMatchObject({ technique: 'twining', rows: 2 });
+  });
+
+  it('says of tabby in pairs, doubled weft and close twining what their bands say', () => {
+    const own = clothOf(pieceOf(
+      { technique: 'tabby', name: 'pairs', yarn: 'ground', heightMm: 40, basket: true },
+      { technique: 'tabby', name: 'single', yarn: 'ground', heightMm: 40 },
+      { technique: 'twining', name: 'close', yarn: 'ground', rows: 2, endsPerTwist: 2 },
+    ));
+    expect(band(own, 'pairs')).toMatchObject({ technique: 'tabby', together: 2 });
+    expect(band(own, 'single')).not.toHaveProperty('together');
+    expect(band(own, 'close')).toMatchObject({ endsPerTwist: 2 });
+    expect(band(clothOf(pieceWith({ yarns: { ground: { metresPer100g: 180, strands: 2, label: 'Fenwool, ' } } })), 'sky')).toMatchObject({ strands: 2, yarn: 'ground' });
+  });
+
+  it('leaves out a band the plan does not know, and draws a role without a yarn undyed', () => {
+    const plan = planOf(PLAIN_PIECE);
+    expect(clothPieceOf(PLAIN_PIECE, { ...plan, bands: [] }, 'It').bands).toEqual([]);
+    const bare = clothPieceOf({ ...PLAIN_PIECE, yarns: {} }, plan, 'It');
+    expect(band(bare, 'sky')).toMatchObject({ colour: NEUTRAL, yarn: 'ground', cover: 0.7 });
   });
 
   it('gives soumak the height that its plain picks leave it', () => {

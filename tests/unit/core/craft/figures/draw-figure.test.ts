@@ -79,6 +79,12 @@ describe('figures', () => {
     expect(figureWords('soumak', INPUT)).toContain('over 4 ends and back under 2');
   });
 
+  it('tell how often a hand winds a butterfly round, in the person’s own units', () => {
+    // 8 m over a hand of 16 cm, there and back: 25 eights; half of it in 13.
+    expect(figureWords('butterfly', INPUT)).toContain('A hand that spans 16\u00a0cm winds 8\u00a0m in 25 of them.');
+    expect(figureWords('butterfly', { ...INPUT, piece: { ...PIECE, allowances: { loadMm: 4000 } } })).toContain('winds 4\u00a0m in 13 of them.');
+  });
+
   it('follow the loom: two neighbouring nails are wound otherwise than every nail', () => {
     const twoNail = { ...INPUT, piece: { ...PIECE, loom: { ...PIECE.loom, warping: 'two-nail' as const } } };
     expect(drawFigure('warping', twoNail)).not.toBe(drawFigure('warping', INPUT));

@@ -140,6 +140,31 @@ describe('scaled', () => {
   });
 });
 
+describe('room that is left', () => {
+  const told = (pattern: FrameLoomPiece, mine: MyPiece): string[] => tellRoom({ piece: pattern, plan: planOf(pattern) }, fittedBy(pattern, mine, 'as-it-is'), 'cm').map(plain);
+
+  // 520 high: (520 − 100) · 0.98 = 411.6 mm of cloth.
+  test('is told in height alone where the loom does not say its width', () => {
+    expect(told(HILLS, {})[0]).toBe('At this spacing your loom holds a piece up to 41.1 cm high.');
+  });
+
+  // 510 high: 401.8 mm, of which 400 are woven. 548.8 mm of width hold more than 300.
+  test('names no filling band where none fills, and no warp where it stays as it is', () => {
+    const fixed: FrameLoomPiece = pieceWith({ bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 400 }] });
+    expect(told(fixed, { loom: { insideWidthMm: 600 } })).toEqual([
+      'At this spacing your loom holds a piece up to 54.8 cm wide and 41.1 cm high.',
+      'As it is, yours stays 30 cm wide and 40 cm high.',
+    ]);
+  });
+
+  // 508.2 high leave (508.163 − 100) · 0.98 = 400 mm for 400: nothing can grow.
+  test('is nothing where the piece is as high as the loom holds', () => {
+    expect(told(HILLS, { loom: { insideHeightMm: 400 / 0.98 + 100 } })).toEqual([]);
+    // 350 inside are the very 32 nails it takes.
+    expect(told(HILLS, { loom: { insideHeightMm: 400 / 0.98 + 100, insideWidthMm: 350 } }).length).toBeLessThanOrEqual(2);
+  });
+});
+
 describe('coarser', () => {
   // r of the pattern 0.362670. Doubled: p 10, warp √2 · 0.8014131; (3.62670 − 1.133369)/1.011937 = 2.46392, squared 6.07.
   test('ends in pairs take as many strands as keep the cloth as tight', () => {

@@ -56,6 +56,23 @@ describe('the plan of a knotted piece', () => {
     expect(planOf(BRAID).cautions.map(({ says }) => says).join(' ')).toMatch(/strangle a small child.*follow your local rules.*qualified person/s);
   });
 
+  test('warns of a cord nobody knots with, a ball that hardly suffices and a rod that is too short or too thin', () => {
+    const warnings = (piece: MacramePiece): string[] => planOf(piece).warnings.map(({ code, path }) => `${code} ${path}`);
+    expect(warnings({ ...BRAID, yarns: { ...BRAID.yarns, gold: { diameterMm: 3 } } })).toEqual(['W_UNUSED /yarns/gold']);
+    expect(warnings({ ...BRAID, rod: { kind: 'rod', diameterMm: 20, lengthMm: 5 } })).toEqual(['W_DOWEL /rod/lengthMm']);
+    expect(warnings({ ...BRAID, rod: { kind: 'rod', diameterMm: 0.5, lengthMm: 400 } })).toContain('W_DOWEL /rod/diameterMm');
+    // Two cords of 8519.36 mm, 10 % on top: 18.74 m. One ball of 19 m leaves 26 cm, less than a tenth.
+    expect(warnings({ ...BRAID, yarns: { main: { diameterMm: 3, ball: { metres: 19, grams: 100 } } } })).toEqual(['W_TIGHT /yarns/main/ball']);
+    expect(warnings({ ...BRAID, yarns: { main: { diameterMm: 3, ball: { metres: 30, grams: 100 } } } })).toEqual([]);
+  });
+
+  test('hours are those of cutting, knotting and finishing, and more for a gathering knot', () => {
+    const wrapped = planOf({ ...BRAID, foot: [{ technique: 'gathering', wraps: 8 }] });
+    expect(wrapped.hours.likely).toBeGreaterThan(planOf(BRAID).hours.likely);
+    expect(wrapped.hours.low).toBeLessThan(wrapped.hours.likely);
+    expect(wrapped.knots).toBe(planOf(BRAID).knots + 1);
+  });
+
   test('a ball on the label is counted, and a thickness that was weighed is believed', () => {
     const yarns = { main: { diameterMm: 3, tex: 4000, ball: { metres: 10, grams: 40 } } };
     const { yarns: planned, massG } = planOf({ ...BRAID, yarns });

@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { judgeMine, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
-import { inOtherUnits, mineOfFields, typeMine, withTriedLoom } from '#core/craft/my-piece/typed-mine.ts';
+import { chosenLoom, judgeMine, waysOf, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { asPattern, inOtherUnits, leftOutBy, mineOfFields, typeMine, wayOf, withTriedLoom, yarnOf } from '#core/craft/my-piece/typed-mine.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 
 const pattern = await lowTide();
@@ -121,6 +121,22 @@ describe('a loom of another size', () => {
     expect(says({ ...LOW, way: 'doubled' })['insideHeightMm']).toContain('The loom is 42 cm high inside.');
   });
 
+  test('shows every way there is, with what it comes to, and the bands that can be ticked', () => {
+    const { mine, ways } = waysOf(typed({ ...LOW, way: 'leave-last' }), pattern);
+    expect(mine).toEqual({ loom: { insideHeightMm: 420 } });
+    expect(ways.map(({ id }) => id)).toEqual(expect.arrayContaining(['as-it-is', 'leave-last', 'leave-first', 'leave-chosen', 'scaled']));
+    expect(leftOutBy(typed({ 'leaveOut.dunes': 'yes', 'leaveOut.foot': 'no', 'leaveOut.nothing': 'yes' }), pattern)).toEqual(['dunes']);
+  });
+
+  test('keeps the bands she ticked in her form, and forgets them with the rest where all is as the pattern', () => {
+    const kept = typeMine({ way: { kind: 'fewer-bands', leaveOut: ['dunes'], heightMm: 300 } }, pattern, 'cm');
+    expect(kept.texts).toMatchObject({ way: 'leave-chosen', 'leaveOut.dunes': 'yes' });
+    // From an end, the reckoning says which: nothing is ticked.
+    expect(Object.keys(typeMine({ way: { kind: 'fewer-bands', leaveOut: ['dunes'], from: 'last' } }, pattern, 'cm').texts)).not.toContain('leaveOut.dunes');
+    expect(wayOf(asPattern(kept, pattern))).toBe('as-it-is');
+    expect(wayOf({ ...kept, texts: { way: 'by-magic' } })).toBe('as-it-is');
+  });
+
   test('a way that the loom does not call for any more falls away', () => {
     expect(judge({ way: 'narrower' })).toMatchObject({ ok: true, mine: {} });
   });
@@ -167,4 +183,37 @@ describe('a piece that is half woven', () => {
   test('yarn that was weighed is judged even before the first row', () => {
     expect(rest({ 'woven.left.water': '1' }).warnings).toMatchObject([{ code: 'W_SHORT', path: '/leftG/water' }]);
   });
+});
+
+describe('what she chose of her loom', () => {
+  const chosen = (texts: Fields) => chosenLoom({ units: 'cm', texts, yarns: {} });
+
+  test('is heard where her kind of loom has it', () => {
+    expect(chosen({ kind: 'two-row-frame', nailRows: 'inner', warping: 'zigzag' })).toEqual({ kind: 'two-row-frame', nailRows: 'inner', warping: 'zigzag' });
+    expect(chosen({ kind: 'nailed-frame', nailRows: 'inner', warping: 'two-nail' })).toEqual({ kind: 'nailed-frame', warping: 'two-nail' });
+    expect(chosen({ kind: 'backstrap', nailRows: 'outer', warping: 'round' })).toEqual({});
+  });
+
+  test('goes into her piece only where it is not the pattern’s own', () => {
+    expect(judge({ kind: 'nailed-frame', endsTogether: '' })).toMatchObject({ ok: true, mine: {} });
+    const judged = judge({ kind: 'two-row-frame', nailRows: 'inner' });
+    expect(judged.ok && judged.mine.loom).toEqual({ kind: 'two-row-frame', nailRows: 'inner' });
+  });
+});
+
+test('a form that was sent is cut to what a person may type, and is read in the units it was shown in', () => {
+  const long = mineOfFields((name) => (name === 'insideWidthMm' ? '9'.repeat(500) : undefined), pattern);
+  expect(long.texts['insideWidthMm']).toHaveLength(200);
+  const shown = mineOfFields((name) => ({ shown: 'cm', units: 'in', insideWidthMm: '50.8' })[name], pattern);
+  expect([shown.units, shown.texts['insideWidthMm']]).toEqual(['in', '20']);
+  expect(yarnOf(shown, 'constructor')).toEqual({});
+});
+
+test('a width the whole loom was too narrow for stands in the form only when she asked for narrower', () => {
+  const before = typeMine({}, pattern, 'cm');
+  const tried = (narrower: boolean) => withTriedLoom(before, { inside: '30', spacing: '8', ends: 1, units: 'cm', narrower }, pattern).texts['widthMm'];
+  expect(tried(false)).toBe('');
+  expect(tried(true)).not.toBe('');
+  const inches = withTriedLoom(before, { inside: '16', spacing: '1/2', ends: 1, units: 'in', narrower: false }, pattern);
+  expect(inches).toMatchObject({ units: 'in', texts: { insideWidthMm: '16', nailPitchMm: '1/2', endsTogether: '1' } });
 });

@@ -61,6 +61,37 @@ describe('rows of the form', () => {
   });
 });
 
+describe('what is typed goes to its field', () => {
+  test('of the warp, a yarn, a shape and the piece', () => {
+    const shaped = changeTyped(form, { do: 'add-shape', band: 0 });
+    expect(typeIn(form, 'warp.yarn.label', 'Fenwool').warpYarn['label']).toBe('Fenwool');
+    expect(typeIn(form, 'yarns.0.label', 'Fenwool').yarns[0]?.texts['label']).toBe('Fenwool');
+    expect(typeIn(shaped, 'bands.0.shapes.0.baseMm', '12').bands[0]?.shapes[0]?.texts['baseMm']).toBe('12');
+    expect(typeIn(shaped, 'bands.0.shapes.3.baseMm', '12')).toEqual(shaped);
+    expect(typeIn(form, 'size.widthMm', '31').texts['size.widthMm']).toBe('31');
+  });
+
+  test('and looking changes nothing', () => {
+    expect(changeTyped(form, { do: 'look' })).toBe(form);
+  });
+});
+
+test('yarns are put in with a dye of their own and told as the last one is, and taken out', () => {
+  const two = changeTyped(form, { do: 'add-yarn' });
+  expect(two.yarns.map(({ id }) => id)).toEqual([1, 2]);
+  expect(two.yarns[1]?.texts).toMatchObject({ role: '', by: 'metresPer100g' });
+  // A new shape shows on the ground it lies in, so it takes the other yarn.
+  expect(changeTyped(two, { do: 'add-shape', band: 0 }).bands[0]?.shapes[0]?.texts['yarn']).toBe('2');
+  const none = changeTyped(form, { do: 'take-out-yarn', yarn: 0 });
+  expect(none.yarns).toEqual([]);
+  const again = changeTyped(typeIn(two, 'yarns.1.by', 'nm'), { do: 'add-yarn' });
+  expect(again.yarns[2]?.texts['by']).toBe('nm');
+  expect(again.yarns[2]?.texts['colour']).not.toBe(again.yarns[1]?.texts['colour']);
+  expect(changeTyped(none, { do: 'add-yarn' }).yarns[0]?.texts['by']).toBe('metresPer100g');
+  expect(changeTyped({ ...none, bands: [] }, { do: 'add-band', after: -1 }).bands[0]?.texts).toEqual({ technique: 'tabby', yarn: '' });
+  expect(changeTyped({ ...two, bands: [] }, { do: 'add-band', after: -1 }).bands[0]?.texts['yarn']).toBe('1');
+});
+
 describe('the band that hands go on with', () => {
   test.each<[Act, number | null]>([
     [{ do: 'add-band', after: -1 }, 0], [{ do: 'add-band', after: 2 }, 3], [{ do: 'copy-band', band: 1 }, 2], [{ do: 'later', band: 1 }, 2],

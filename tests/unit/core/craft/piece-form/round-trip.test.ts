@@ -5,7 +5,7 @@ import { shapeFields } from '#core/craft/piece-form/asked-of-band.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
-import { readText, shiftPoint } from '#core/craft/piece-form/field-text.ts';
+import { fieldText, fieldUnit, readText, shiftPoint } from '#core/craft/piece-form/field-text.ts';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { typePiece } from '#core/craft/piece-form/type-piece.ts';
@@ -66,6 +66,23 @@ describe('a piece in a form', () => {
 
 test.each([['0.02', 2, '2'], ['0.025', 2, '2.5'], ['1', 2, '100'], ['0', 2, '0'], ['2.5', -2, '0.025'], ['12', -2, '0.12'], ['100', -2, '1'], ['5', -2, '0.05']])('the point of %s moved by %i gives %s', (text, places, shifted) => {
   expect(shiftPoint(text, places)).toBe(shifted);
+});
+
+test.each([
+  ['length', 'cm', 'in'], ['lean', 'cm', 'in'], ['fine', 'mm', 'in'], ['yarn', 'm', 'yd'], ['points', 'cm', 'in'], ['share', '%', '%'], ['role', undefined, undefined],
+] as const)('a field for a %s says its unit: %s, or %s', (kind, cm, inches) => {
+  const asked = { key: 'a', label: 'A', kind } as const;
+  expect([fieldUnit(asked, 'cm'), fieldUnit(asked, 'in')]).toEqual([cm, inches]);
+});
+
+test('a field for a number says the unit it is given, and one for words none', () => {
+  expect(fieldUnit({ key: 'a', label: 'A', kind: 'number', unit: 'tex' }, 'cm')).toBe('tex');
+  expect(fieldUnit({ key: 'a', label: 'A', kind: 'text', maxLength: 9 }, 'cm')).toBeUndefined();
+});
+
+test('a value of a kind its field does not take is shown as nothing', () => {
+  const lengthField = { key: 'a', label: 'A', kind: 'length' } as const;
+  expect([fieldText('wide', lengthField, 'cm'), fieldText([{ xMm: 0, yMm: 0 }], lengthField, 'cm'), fieldText(undefined, lengthField, 'cm')]).toEqual(['', '', '']);
 });
 
 describe('corners of a shape in one field', () => {

@@ -138,6 +138,14 @@ describe('what is on the loom stays', () => {
     expect(refusals({ ...pattern, bands: pattern.bands.slice(1) })).toEqual(['E_FIT /bands']);
   });
 
+  test('so do ends that are worked singly or in pairs', () => {
+    expect(refusals({ ...pattern, warp: { ...pattern.warp, endsTogether: pattern.warp.endsTogether === 2 ? 1 : 2 } }, { bandsDone: 1 })).toContain('E_FIT /warp/endsTogether');
+    // A first row is enough; a band that is not begun may go.
+    expect(refusals({ ...pattern, bands: pattern.bands.slice(1) }, { bandsDone: 0, rows: 1 })).toEqual(['E_FIT /bands']);
+    expect(refusals({ ...pattern, bands: pattern.bands.toSpliced(1, 1) }, { bandsDone: 1 })).toEqual([]);
+    expect(refusals({ ...pattern, bands: pattern.bands.toSpliced(1, 1) }, { bandsDone: 1, rows: 1 })).toEqual(['E_FIT /bands']);
+  });
+
   test('but not its other yarns and the bands to come, nor anything while nothing is woven', () => {
     expect(refusals({ ...pattern, bands: pattern.bands.filter(({ name }) => name !== 'calm-high'), yarns: { ...pattern.yarns, ridge: { tex: 300 } } })).toEqual([]);
     expect(refusals(widen(pattern, 300), { bandsDone: 0 })).toEqual([]);

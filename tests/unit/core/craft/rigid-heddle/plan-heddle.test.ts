@@ -1,9 +1,10 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
-import { amountKeysOf } from '#core/craft/amounts.ts';
+import { amountKeysOf, amountOf } from '#core/craft/amounts.ts';
 import { clothOf } from '#core/craft/cloth-of.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import { CRAFTS } from '#core/craft/crafts.ts';
+import { fitPiece } from '#core/craft/fit.ts';
 import { pickGeometry, pickLength } from '#core/craft/picks.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { HeddlePiece, HeddlePlan } from '#core/craft/rigid-heddle/piece.ts';
@@ -55,6 +56,41 @@ describe('a cloth on a rigid heddle', () => {
     const plan = planOf(SCARF);
     expect(drawCloth(clothOf(SCARF, plan, 'Scarf'), { id: 'a', as: 'hanging', width: 120 })).toContain('150\u00a0cm of tabby');
     expect(amountKeysOf(SCARF, plan)).toContain('yarn.warp.mass');
+  });
+
+  // 230.795 m of warp and 10 % in reserve are 253.9 m: two balls of 200 m.
+  const LABELLED: HeddlePiece = { ...SCARF, yarns: { warp: { ...SCARF.yarns.warp, label: 'Fenwool', ball: { metres: 200, grams: 50 } }, weft: { tex: 250 } } };
+  test.each([
+    ['yarn.warp', 'Fenwool'], ['yarn.weft', 'weft'], ['yarn.warp.balls', 'Balls of Fenwool'],
+    ['yarn.weft.balls', 'A yarn has mass and, where its label says, balls.'], ['yarn.warp.colour', 'A yarn has mass and, where its label says, balls.'],
+    ['yarn.sky', 'No amount is called “yarn.sky”.'], ['heddle.width', 'Width in the heddle'], ['nails', 'No amount is called “nails”.'],
+  ])('%s is told as %s', (key, label) => {
+    const amount = amountOf(key, LABELLED, planOf(LABELLED));
+    expect(amount.ok ? amount.value.label : amount.problems[0]?.message).toBe(label);
+  });
+
+  test('is bought by role, and a student’s own yarn and width go into it', () => {
+    const heddle = CRAFTS['rigid-heddle'];
+    expect(heddle.materials({ piece: LABELLED, plan: planOf(LABELLED) })).toMatchObject([{ key: 'yarn.warp', label: 'Fenwool', balls: 2 }, { key: 'yarn.weft', role: 'weft' }]);
+    expect([heddle.roleOfKey('yarn.warp.mass', SCARF), heddle.roleOfKey('ends', SCARF)]).toEqual(['warp', undefined]);
+    const fitted = fitPiece(SCARF, { widthMm: 100, yarns: { weft: { tex: 300 } } });
+    // Half as wide: 45.05 ends of 90.09, 45.
+    expect(fitted.ok && fitted.value).toMatchObject({ piece: { yarns: { warp: SCARF.yarns.warp, weft: { tex: 300 } } }, changes: ['There are 45 ends instead of 90.'] });
+  });
+
+  test('without allowances takes the usual ones, and two pieces share a warp', () => {
+    const { allowances: _, ...bare } = SCARF;
+    // 1500/(0.9 · 0.9) + 610 mm; 200/(0.92 · 0.9)/2.54 = 95.1 ends.
+    expect(planOf(bare).warpEndMm).toBeCloseTo(1500 / 0.81 + 610, 9);
+    expect(planOf(bare).ends.count).toBe(95);
+    const two = planOf({ ...bare, pieces: 2, allowances: { gapMm: 100 } });
+    expect(two.warpEndMm).toBeCloseTo(3000 / 0.81 + 100 + 610, 9);
+    expect(two.picks).toBe(1200);
+  });
+
+  test('a cloth of too many ends is refused', () => {
+    const planned = planPiece({ ...SCARF, size: { widthMm: 9000, lengthMm: 100 } });
+    expect(planned.ok ? '' : planned.problems[0]?.message).toMatch(/ends are too many to weave with/);
   });
 
   test('longer, wider or with more allowance never needs less yarn, and the unit of typing does not matter', () => {
