@@ -56,8 +56,7 @@ function readLeaveOut(fields: Fields): readonly string[] {
 }
 
 function readStrands(fields: Fields): Readonly<Record<string, number>> {
-  const group = fields.optionalGroup('strands', 'Strands');
-  if (group === undefined) return {};
+  const group = fields.group('strands', 'Strands');
   const roles = group.entries().map(([role]) => role);
   return Object.fromEntries(roles.map((role) => [role, group.number(role, { name: 'Strands', min: 1, max: 100, whole: true })]));
 }

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { amountKeysOf, amountOf, type Amount } from '#core/craft/amounts.ts';
+import type { Input } from '#core/craft/amounts/amount-types.ts';
 import { AMOUNTS } from '#core/craft/frame-loom/amounts.ts';
 import { leastTrust } from '#core/craft/trust.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
@@ -85,6 +86,76 @@ test('every amount says how it was got: formula, what went in, source and trust'
   }
 });
 
+describe('what went into an amount', () => {
+  const inWords = (input: Input): string =>
+    input.kind === 'number' ? input.value.toFixed(2) : input.kind === 'share' ? `${(input.share * 100).toFixed(2)} %` : amountText(input, 'cm').replaceAll('\u00a0', ' ');
+  const went = (key: string, piece?: FrameLoomPiece): Record<string, string> =>
+    Object.fromEntries(amount(key, piece).howReckoned.inputs.map(({ name, value }) => [name, inWords(value)]));
+
+  // 300/0.98 = 306.12 mm at 5 mm are 61.22 ends, 62 for an even number. They go over 520 mm and half round each of 63
+  // nails: 32.77 m, 36.05 with a tenth on top, 13.1 g of 400 tex.
+  // A row is 61 gaps of 5 mm with 6.65 % of take-up and a turn, 328.48 mm: two between the soumak are 0.66 m, 249 of the
+  // sky 81.8 m, and 11 loads leave two tails of 50 mm each: 83.55 m, with 15 % 96.1 m.
+  test.each<[string, Record<string, string>]>([
+    ['ends', { 'width on the loom': '31 cm', 'from nail to nail': '10 mm', 'before rounding': '61.22' }],
+    ['nails', { 'warp ends': '62 ends', 'on the lower rail': '31 nails' }],
+    ['spacing', { 'from nail to nail': '10 mm', 'every so-many-th nail': '1.00', 'ends worked together': '1.00' }],
+    ['width', {}],
+    ['wound-width', { 'warp ends': '62 ends' }],
+    ['loom.width', { nails: '32 nails', 'from nail to nail': '10 mm' }],
+    ['loom.height', { 'height on the loom': '41 cm', above: '4 cm', below: '6 cm' }],
+    ['warp', { 'warp ends': '62 ends', 'height of the frame': '52 cm', 'without margin': '33 m', margin: '10.00 %' }],
+    ['warp.balls', { 'length with margin': '36 m' }],
+    ['yarn.ground', { ridge: '0.7 m', sky: '82 m', 'without margin': '84 m', margin: '15.00 %' }],
+    ['yarn.ground.balls', { 'length with margin': '96 m', 'length of a ball': '90 m' }],
+    ['band.fringe-low.height', {}],
+    ['band.sky.rows', { height: '36 cm' }],
+    ['band.fringe-low.knots', { 'working ends': '62 ends' }],
+    ['band.fringe-low.strands', { knots: '62 knots' }],
+    ['band.fringe-low.cut', { pile: '15 cm', trim: '1 cm' }],
+    ['band.sky.yarn', { 'working ends': '62 ends' }],
+    ['spacer.width', { 'width of the warp': '31 cm' }],
+    ['spacer.height', {}],
+    ['dowel.length', { width: '30 cm' }],
+    ['dowel.diameter', { 'mass of the piece': '128 g', 'thinnest that does not sag': '7 mm' }],
+    ['cord', {}],
+    ['hours', { 'warp ends': '62 ends' }],
+    ['mass', { warp: '13 g' }],
+    ['pick', { 'working ends': '62 ends', 'take-up': '6.65 %' }],
+    ['rows-per-load', { 'yarn on the shuttle': '8 m', 'yarn in one row': '33 cm' }],
+  ])('%s: %j', (key, inputs) => {
+    expect(went(key)).toEqual(inputs);
+  });
+
+  test('is this piece’s own: nails left out, ends in pairs, loads and margins it says itself', () => {
+    const own: FrameLoomPiece = { ...PIECE, loom: { ...PIECE.loom, nailPitchMm: 5, everyNthNail: 2 }, warp: { ...PIECE.warp, endsTogether: 2 }, allowances: { loadMm: 5000, marginWarp: 0.2, marginWeft: 0.3 }, mode: 'balanced' };
+    expect(went('spacing', own)).toEqual({ 'from nail to nail': '5 mm', 'every so-many-th nail': '2.00', 'ends worked together': '2.00' });
+    expect(went('rows-per-load', own)).toMatchObject({ 'yarn on the shuttle': '5 m' });
+    expect(went('warp', own)).toMatchObject({ margin: '20.00 %' });
+    expect(went('yarn.ground', own)).toMatchObject({ margin: '30.00 %' });
+  });
+
+  test('a band without a name goes in under its technique', () => {
+    expect(went('yarn.ground', PLAIN_PIECE)).toHaveProperty('sky');
+    const [{ name: _, ...unnamed }] = PLAIN_PIECE.bands;
+    expect(went('yarn.ground', pieceWith({ bands: [unnamed] }))).toHaveProperty('tabby');
+  });
+});
+
+test('rows from one shuttle are those of the yarn with most rows', () => {
+  // The thicker sand lies in 40 mm, the ground in the other 360: 24 rows of 328 mm go on 8 m, as without it.
+  const piece = pieceWith({ yarns: { sand: { tex: 2000 }, ground: { metresPer100g: 180 } }, bands: [{ technique: 'tabby', name: 'dune', yarn: 'sand', heightMm: 40 }, ...PLAIN_PIECE.bands] });
+  const { yarns } = planOf(piece);
+  expect(amount('rows-per-load', piece)).toMatchObject({ count: yarns['ground']?.rowsPerLoad ?? 0 });
+  expect(yarns['ground']?.rowsPerLoad).not.toBe(0);
+});
+
+test.each([
+  ['band.fringe-low.knots', 'Fringe low: knots'], ['band.ridge.stitches', 'Ridge: stitches'], ['band.sky.yarn', 'Sky: Fenwool 6/2'], ['band.fluff.yarn', 'Fluff: fringe'], ['yarn.fringe', 'fringe'],
+])('%s is labelled %s', (key, label) => {
+  expect(amount(key).label).toBe(label);
+});
+
 test('every kind of amount is told by this piece, written out by role and band', () => {
   const keys = amountKeysOf(PIECE, PLAN);
   for (const key of AMOUNTS.flatMap((group) => group.keys)) {
@@ -103,6 +174,13 @@ describe('trust', () => {
     expect(amount('yarn.ground', swatch).howReckoned.trust).toBe('measured');
     expect(amount('yarn.ground.mass', swatch).howReckoned.trust).toBe('label');
     expect(amount('yarn.fringe', swatch).howReckoned.trust).toBe('formula');
+    // What lies in picks of wrapped yarn is as sure as its swatch; pile is as sure as how thick the yarn was found to lie.
+    expect(amount('band.sky.yarn', swatch).howReckoned.trust).toBe('measured');
+    expect(amount('band.sky.yarn').howReckoned.trust).toBe('formula');
+    expect(amount('band.ridge.yarn', swatch).howReckoned.trust).toBe('formula');
+    const wrapped: FrameLoomPiece = { ...PIECE, yarns: { ...PIECE.yarns, fringe: { metresPer100g: 100, wrapsPerInch: 7 } } };
+    expect(amount('band.fringe-low.cut', wrapped).howReckoned.trust).toBe('measured');
+    expect(amount('band.fringe-low.cut').howReckoned.trust).toBe('formula');
   });
 
   test('is that of the least certain input', () => {
