@@ -7,7 +7,7 @@ const MOST_BYTES = 25_000;
 /** All four engines together. */
 const MOST_BYTES_OF_ALL = 28_000;
 /** A whole island besides React: its fields and words, and of every craft the engine, amounts, changes and drawing. */
-const MOST_BYTES_OF_ISLAND = 72_000;
+const MOST_BYTES_OF_ISLAND = 80_000;
 
 interface Bundle {
   readonly code: Uint8Array;
@@ -40,7 +40,7 @@ test.each([
   expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES);
 });
 
-test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx', 'series/TrialLooms.tsx'])('the island %s loads no figure of a technique, and stays below 72 kB', async (island) => {
+test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx', 'series/TrialLooms.tsx'])('the island %s loads no figure of a technique, and stays below 80 kB', async (island) => {
   const { code, files } = await bundle(`export * from './src/islands/${island}';`);
   const { byteLength } = brotliCompressSync(code);
   expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES_OF_ISLAND);
