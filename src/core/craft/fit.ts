@@ -23,7 +23,7 @@ export interface FittedPiece<P extends Piece = Piece> {
 /** A yarn kept for a role the teacher has since taken out of the pattern does no harm. */
 function warnOfLostRoles(pattern: Piece, mine: MyPiece): readonly Problem[] {
   const known = craftOf(pattern).ownNames(pattern)['role'] ?? [];
-  return Object.keys(mine.yarns ?? {}).filter((role) => !known.includes(role)).map((role) => ({
+  return [...Object.keys(mine.yarns ?? {}), ...Object.keys(mine.cords ?? {})].filter((role) => !known.includes(role)).map((role) => ({
     code: 'W_UNUSED',
     path: `/yarns/${role}`,
     message: `The pattern has no yarn in the role “${role}” any more.`,

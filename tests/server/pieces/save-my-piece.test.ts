@@ -1,6 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { MyPieceForm } from '#contracts/my-piece.ts';
+import { CRAFTS } from '#core/craft/crafts.ts';
+import { madeFor } from '#core/craft/made-for.ts';
 import { MyPieceRow, PatternPiece, User } from '#server/models/index.ts';
+import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { contextFor, contextOf } from '../../support/context.ts';
 import { buildUser } from '../../support/factories.ts';
@@ -109,5 +112,45 @@ describe('a student’s own piece', () => {
     const { series, student, seat } = await buildFollowed();
     await saveMyPiece(await contextFor(student), form(series.slug, { ...FITS, insideHeightMm: ['64', '65'], constructor: 'x', 'yarns.constructor.by': 'tex' }));
     expect((await MyPieceRow.findByPk(seat.id))?.data.loom).toEqual({ insideWidthMm: 360, nailPitchMm: 8 });
+  });
+});
+
+describe('a student’s own cord for a knotted piece', () => {
+  const THICK = { 'cords.main.diameterMm': '3', 'cords.main.label': 'Harbour, thin', 'rod.diameterMm': '25', units: 'cm', shown: 'cm' };
+
+  async function buildKnotted() {
+    const followed = await buildFollowed();
+    await PatternPiece.update({ data: CRAFTS.macrame.example }, { where: { seriesId: followed.series.id } });
+    return followed;
+  }
+
+  test('is kept with her rod, in the units she typed', async () => {
+    const { series, student, seat } = await buildKnotted();
+    await saveMyPiece(await contextFor(student), form(series.slug, THICK));
+    expect((await MyPieceRow.findByPk(seat.id))?.data).toEqual({ cords: { main: { diameterMm: 3, label: 'Harbour, thin' } }, rod: { diameterMm: 25 } });
+  });
+
+  test('is reckoned with wherever the series tells amounts', async () => {
+    const { series, student, seat } = await buildKnotted();
+    await saveMyPiece(await contextFor(student), form(series.slug, THICK));
+    const { pattern, mine } = await piecesOf(series.id, seat.id);
+    const made = madeFor(pattern, mine, 'cm');
+    expect(made?.isOwn).toBe(true);
+    expect(made?.piece).toMatchObject({ rod: { diameterMm: 25 }, yarns: { main: { diameterMm: 3 } } });
+  });
+
+  test('is not kept when it cannot be knotted: every field says why', async () => {
+    const { series, student, seat } = await buildKnotted();
+    const bad = form(series.slug, { ...THICK, 'cords.main.diameterMm': 'thin', 'rod.diameterMm': '' });
+    await expect(saveMyPiece(await contextFor(student), bad)).rejects.toMatchObject({ code: 'VALIDATION', fields: { 'cords.main.diameterMm': expect.any(String) } });
+    await expect(saveMyPiece(await contextFor(student), form(series.slug, { ...THICK, 'cords.main.diameterMm': '90' }))).rejects.toMatchObject({ code: 'VALIDATION', fields: { 'cords.main.diameterMm': expect.stringContaining('works') } });
+    expect(await MyPieceRow.findByPk(seat.id)).toBeNull();
+  });
+
+  test('goes back to the pattern in one press', async () => {
+    const { series, student, seat } = await buildKnotted();
+    await saveMyPiece(await contextFor(student), form(series.slug, THICK));
+    await saveMyPiece(await contextFor(student), form(series.slug, { ...THICK, revision: '1', asPattern: 'yes' }));
+    expect((await MyPieceRow.findByPk(seat.id))?.data).toEqual({});
   });
 });

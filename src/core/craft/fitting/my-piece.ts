@@ -5,6 +5,12 @@ import { LOOM_KIND_NAMES, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
 
+/** A cord told by its thickness. */
+export interface OwnCord {
+  readonly diameterMm: number;
+  readonly label?: string;
+}
+
 export interface MyPiece {
   readonly loom?: {
     readonly kind?: LoomKindName;
@@ -18,6 +24,10 @@ export interface MyPiece {
   readonly endsTogether?: EndsTogether;
   /** Her own yarn in a role of the pattern. */
   readonly yarns?: Readonly<Record<string, Yarn>>;
+  /** Her own cord in a role of a knotted pattern. */
+  readonly cords?: Readonly<Record<string, OwnCord>>;
+  /** Her own rod's thickness, or her own ring's width. */
+  readonly rod?: { readonly diameterMm: number };
   /** How the pattern is fitted to her loom. */
   readonly way?: FitWay;
 }
@@ -35,6 +45,9 @@ export function checkMine(mine: unknown, findings: Findings): void {
   fields.take('endsTogether');
   const yarns = fields.optionalGroup('yarns', 'The group of yarns');
   for (const [role] of yarns?.entries() ?? []) yarns?.group(role, 'Yarn');
+  const cords = fields.optionalGroup('cords', 'The group of cords');
+  for (const [role] of cords?.entries() ?? []) cords?.group(role, 'Cord');
+  fields.optionalGroup('rod', 'What it hangs from');
   const way = fields.take('way');
   if (way !== undefined) readWay(way, fields);
   fields.end();

@@ -5,6 +5,7 @@ import { AMOUNTS, amountIn } from '#core/craft/macrame/amounts.ts';
 import { CORD_CAUTIONS } from '#core/craft/macrame/cautions.ts';
 import { drawMacrame } from '#core/craft/macrame/draw.ts';
 import { EXAMPLE } from '#core/craft/macrame/example.ts';
+import type { MyPiece } from '#core/craft/fitting/my-piece.ts';
 import type { Cord, MacramePiece, MacramePlan } from '#core/craft/macrame/piece.ts';
 import { planMacrame } from '#core/craft/macrame/plan-macrame.ts';
 import { readPiece } from '#core/craft/macrame/read-piece.ts';
@@ -34,10 +35,17 @@ function ownCords(pattern: MacramePiece['yarns'], mine: Readonly<Record<string, 
   }));
 }
 
+function change(pattern: MacramePiece, { yarns, cords, rod }: MyPiece): MacramePiece {
+  if (yarns === undefined && cords === undefined && rod === undefined) return pattern;
+  return { ...pattern, yarns: ownCords(pattern.yarns, { ...yarns, ...cords }), rod: rod === undefined ? pattern.rod : { ...pattern.rod, diameterMm: rod.diameterMm } };
+}
+
 function tellChanges(before: Made, after: Made, units: Units): string[] {
   const yarns = Object.entries(after.piece.yarns).flatMap(([role, cord]) => (cord === before.piece.yarns[role] ? [] : [`${cord.label ?? 'Your own cord'} is the ${role} cord.`]));
   const longer = Math.abs(after.plan.heightMm - before.plan.heightMm) < 1 ? [] : [`The piece comes out ${size(after.plan.heightMm, units)} long instead of ${size(before.plan.heightMm, units)}.`];
-  return [...yarns, ...longer];
+  const { rod } = after.piece;
+  const hung = rod.diameterMm === before.piece.rod.diameterMm ? [] : [`It hangs from a ${rod.kind} ${amountText(lengthOf(rod.diameterMm, 'fine'), units)} ${rod.kind === 'rod' ? 'thick' : 'wide'}.`];
+  return [...yarns, ...hung, ...longer];
 }
 
 export const MACRAME: Craft<MacramePiece, MacramePlan> = {
@@ -64,7 +72,7 @@ export const MACRAME: Craft<MacramePiece, MacramePlan> = {
   materials,
   roleOfKey: (key) => (key.startsWith('yarn.') ? key.split('.')[1] : undefined),
   draw: drawMacrame,
-  change: (pattern, { yarns }) => (yarns === undefined ? pattern : { ...pattern, yarns: ownCords(pattern.yarns, yarns) }),
+  change,
   tellChanges,
   summary: ({ piece, plan }, units) => `${String(plan.cords)} cords on a ${piece.rod.kind}, ${size(plan.heightMm, units)} long`,
   size: ({ plan }, units) => `${size(plan.heightMm, units)} long, about ${size(plan.widthMm, units)} wide where it is knotted`,

@@ -1,7 +1,11 @@
 import type { MyPieceInput } from '#contracts/my-piece.ts';
-import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
+import type { Piece } from '#core/craft/crafts.ts';
+import { cordsOfFields, judgeCords, typeCords } from '#core/craft/macrame/my-piece.ts';
+import { judgeMine, type MineFound } from '#core/craft/my-piece/judge-mine.ts';
 import { asPattern, mineOfFields } from '#core/craft/my-piece/typed-mine.ts';
-import { isBegun } from '#core/craft/rest/woven-so-far.ts';
+import type { MyPiece } from '#core/craft/fit.ts';
+import { isBegun, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
+import type { Units } from '#core/units/units.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize, found } from '#server/errors.ts';
@@ -12,7 +16,7 @@ import { seriesFor } from '#server/queries/series/series-for.ts';
 const CHANGED = { says: 'Your piece was changed in another window or on another device meanwhile. What you typed still stands here. Keep it once more to have it so, or load the page again to see the other.' };
 
 /**
- * Keeps a student's own loom, width and yarns, if the piece can be woven so, with what is woven of it; and the units she
+ * Keeps a student's own loom, width and yarns, or cord and rod, if the piece can be made so, with what is woven of it; and the units she
  * chose, with her account. What is woven already can no longer change. `isBegun` says whether some of it is.
  * @throws VALIDATION with a sentence for each field; CONFLICT when another window or device changed it meanwhile.
  */
@@ -24,12 +28,8 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
   authorize(seat !== null);
   const { pattern, ...before } = await piecesOf(series.id, seat.enrolmentId);
   if (pattern === null) throw new AppError('CONFLICT', { says: 'This series tells no piece yet, so there is nothing to reckon for your loom.' });
-  if (pattern.craft !== 'frame-loom') throw new AppError('CONFLICT', { says: 'This piece is not woven on a frame, so it asks nothing of your loom.' });
   if (before.revision !== input.revision) throw new AppError('CONFLICT', CHANGED);
-  const fields: Readonly<Record<string, unknown>> = input;
-  const sent = mineOfFields((name) => textOf(fields, name), pattern);
-  const typed = input.asPattern === undefined ? sent : asPattern(sent, pattern);
-  const judged = judgeMine(typed, pattern, before);
+  const { units, judged } = judge(input, pattern, before);
   if (!judged.ok) throw new AppError('VALIDATION', { fields: Object.fromEntries(judged.problems.map(({ field, says }) => [field, says])) });
   const woven = judged.halfway?.woven ?? null;
   return withTransaction(async () => {
@@ -39,9 +39,27 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
     const revision = input.revision + 1;
     if (kept === null) await MyPieceRow.create({ enrolmentId: seat.enrolmentId, data: judged.mine, woven, revision });
     else await kept.update({ data: judged.mine, woven, revision });
-    await User.update({ units: typed.units }, { where: { id: userId } });
+    await User.update({ units }, { where: { id: userId } });
     return { revision, isBegun: woven !== null && isBegun(woven) };
   });
+}
+
+interface Judged {
+  readonly units: Units;
+  readonly judged: { readonly ok: true; readonly mine: MyPiece; readonly halfway?: { readonly woven: WovenSoFar } | null | undefined } | { readonly ok: false; readonly problems: readonly MineFound[] };
+}
+
+/** What she sent, read as her pattern's craft asks it. */
+function judge(input: MyPieceInput, pattern: Piece, before: { readonly mine: MyPiece; readonly woven: WovenSoFar }): Judged {
+  const fields: Readonly<Record<string, unknown>> = input;
+  const ask = (name: string): string | undefined => textOf(fields, name);
+  if (pattern.craft === 'macrame') {
+    const sent = cordsOfFields(ask, pattern);
+    return { units: sent.units, judged: judgeCords(input.asPattern === undefined ? sent : typeCords({}, pattern, sent.units), pattern) };
+  }
+  if (pattern.craft !== 'frame-loom') throw new AppError('CONFLICT', { says: 'This piece is made as its pattern has it, so it asks nothing of yours.' });
+  const sent = mineOfFields(ask, pattern);
+  return { units: sent.units, judged: judgeMine(input.asPattern === undefined ? sent : asPattern(sent, pattern), pattern, before) };
 }
 
 function textOf(fields: Readonly<Record<string, unknown>>, name: string): string | undefined {
