@@ -1,4 +1,4 @@
-import { FinishForm, GatheredForm } from '#contracts/following.ts';
+import { CalendarForm, FinishForm, GatheredForm } from '#contracts/following.ts';
 import { MyPieceForm } from '#contracts/my-piece.ts';
 import { TickInput } from '#contracts/ticks.ts';
 import { stepAnchor } from '#core/lesson-text/tree.ts';
@@ -6,6 +6,7 @@ import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
+import { renewCalendar } from '#server/use-cases/timetable/renew-calendar.ts';
 import { formAction } from './form-action.ts';
 
 /** Forms of following a series. A form goes back to the page it stands on, at its place. */
@@ -21,9 +22,14 @@ export const following = {
   }),
 
   finish: formAction(FinishForm, async (input, ctx) => {
-    const { number, next } = await finishPart(ctx, input);
+    const { number, next, isLast } = await finishPart(ctx, input);
     if (!input.done) return { to: `/series/${input.series}/${number}#end`, said: `Part ${number} is open again.` };
-    return next === null ? { to: '/loom', said: `Part ${number} is done. The piece is off the loom.` } : { to: `/series/${input.series}/${next}`, said: `Part ${number} is done.` };
+    return next === null ? { to: '/loom', said: `Part ${number} is done. ${isLast ? 'The piece is off the loom.' : 'You get a letter when the next part opens.'}` } : { to: `/series/${input.series}/${next}`, said: `Part ${number} is done.` };
+  }),
+
+  renewCalendar: formAction(CalendarForm, async ({ series }, ctx) => {
+    await renewCalendar(ctx, series);
+    return { to: `/series/${series}/timetable#subscribe`, said: 'A new address is made. The old one has ended.' };
   }),
 
   savePiece: formAction(MyPieceForm, async (input, ctx) => {

@@ -17,5 +17,7 @@ export const GatheredForm = z.object({
 }));
 export type GatheredInput = z.output<typeof GatheredForm>;
 
+export const CalendarForm = z.object({ series: slug });
+
 export const FinishForm = z.object({ series: slug, lesson: publicId, done: z.enum(['yes', 'no']).transform((word) => word === 'yes') });
 export type FinishInput = z.output<typeof FinishForm>;

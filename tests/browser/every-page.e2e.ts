@@ -34,6 +34,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/series': [['visitor', '/series']],
   '/series/[slug]': [['visitor', '/series/low-tide'], ['maud', '/series/low-tide']],
   '/series/[slug]/[part]': [['visitor', '/series/low-tide/1'], ['maud', '/series/low-tide/2'], ['maud', '/series/low-tide/3'], ['amara', '/series/low-tide/2'], ['ilse', '/series/low-tide/6']],
+  '/series/[slug]/timetable': [['maud', '/series/low-tide/timetable']],
   '/series/[slug]/gather': [['visitor', '/series/low-tide/gather'], ['maud', '/series/low-tide/gather']],
   '/series/[slug]/seat': [['maud', '/series/low-tide/seat']],
   '/sign-in': [['visitor', '/sign-in']],
@@ -45,6 +46,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/money': [['ilse', '/workroom/money']],
   '/workroom/series/new': [['ilse', '/workroom/series/new']],
   '/workroom/series/[slug]': [['ilse', '/workroom/series/low-tide'], ['teodor', '/workroom/series/three-knotted-cords']],
+  '/workroom/series/[slug]/timetable': [['ilse', '/workroom/series/low-tide/timetable']],
   '/workroom/series/[slug]/piece': [['ilse', '/workroom/series/low-tide/piece'], ['teodor', '/workroom/series/three-knotted-cords/piece']],
   '/workroom/series/[slug]/parts/[part]': [['ilse', ofPart('')]],
   '/workroom/series/[slug]/parts/[part]/gather': [['ilse', ofPart('/gather')]],
@@ -58,7 +60,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
-const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/media/[id]/[file]', '/sign-out']);
+const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
 
 test('every page of the program is looked at', () => {
   const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));

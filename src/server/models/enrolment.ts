@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { id, maybeMoment, maybeRef, moment, oneOf, publicId, ref } from '#server/db/columns.ts';
+import { count, id, maybeMoment, maybeRef, moment, oneOf, publicId, ref } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /** A seat: the right of one person to one series. */
@@ -14,6 +14,8 @@ export class Enrolment extends Model<InferAttributes<Enrolment>, InferCreationAt
   declare startedAt: Date;
   /** When it was first looked at which parts are open; what opened later is told. */
   declare openingsBegunAt: CreationOptional<Date | null>;
+  /** Rises when she asks for a new address of her calendar. */
+  declare calendarRevision: CreationOptional<number>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -28,6 +30,7 @@ Enrolment.init({
   state: oneOf(['active', 'closed'], 'active'),
   startedAt: moment(),
   openingsBegunAt: maybeMoment(),
+  calendarRevision: count(),
   createdAt: moment(),
   updatedAt: moment(),
 }, { sequelize, tableName: 'enrolments' });

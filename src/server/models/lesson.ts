@@ -16,6 +16,8 @@ export class Lesson extends Model<InferAttributes<Lesson>, InferCreationAttribut
   declare isPreview: CreationOptional<boolean>;
   declare opens: OpeningRule;
   declare opensAt: CreationOptional<Date | null>;
+  /** Rises whenever its number, its title or the rule of its opening changes. */
+  declare timetableRevision: CreationOptional<number>;
   declare checkpoint: CreationOptional<Checkpoint | null>;
   declare draftSource: CreationOptional<string>;
   /** How the draft was read when it was saved: the tree, or the reasons why there is none. */
@@ -37,6 +39,7 @@ Lesson.init({
   isPreview: yes(false),
   opens: json(),
   opensAt: maybeMoment(),
+  timetableRevision: count(),
   checkpoint: maybeJson(),
   draftSource: longText(),
   draftReading: { ...json(), defaultValue: { ok: false, problems: [] } },

@@ -11,6 +11,7 @@ import { createVideos } from './0008-create-videos.ts';
 import { addWovenSoFar } from './0009-add-woven-so-far.ts';
 import { createOpenings } from './0010-create-openings.ts';
 import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
+import { createCalendars } from './0012-create-calendars.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -24,4 +25,5 @@ export const migrations: readonly Migration[] = [
   addWovenSoFar,
   createOpenings,
   createEarlierDrafts,
+  createCalendars,
 ];

@@ -9,6 +9,8 @@ export interface PartFinished {
   readonly number: number;
   /** Number of the part after it; null at the end of the series. */
   readonly next: number | null;
+  /** Nothing comes after it: no further part is being written. */
+  readonly isLast: boolean;
 }
 
 /**
@@ -28,5 +30,6 @@ export async function finishPart(ctx: Context, input: FinishInput): Promise<Part
      ON DUPLICATE KEY UPDATE finished_at = IF(:done, COALESCE(finished_at, :now), NULL), updated_at = :now`,
     { replacements: { seat: seat.enrolmentId, lesson: part.id, at: input.done ? now : null, done: input.done ? 1 : 0, now }, type: QueryTypes.INSERT },
   );
-  return { number: part.number, next: series.parts.find(({ number }) => number === part.number + 1)?.number ?? null };
+  const next = series.parts.find(({ number }) => number === part.number + 1)?.number ?? null;
+  return { number: part.number, next, isLast: next === null && series.toCome.length === 0 };
 }

@@ -90,6 +90,6 @@ async function putAt(others: readonly Lesson[], lesson: Lesson, to: number): Pro
 
 async function numberParts(lessons: readonly Lesson[]): Promise<void> {
   for (const [index, lesson] of lessons.entries()) {
-    if (lesson.position !== index + 1) await lesson.update({ position: index + 1 });
+    if (lesson.position !== index + 1) await lesson.update({ position: index + 1, timetableRevision: lesson.timetableRevision + 1 });
   }
 }

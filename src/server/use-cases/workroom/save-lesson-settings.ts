@@ -1,3 +1,4 @@
+import { isDeepStrictEqual } from 'node:util';
 import type { LessonSettingsInput } from '#contracts/workroom.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
@@ -19,6 +20,7 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
     const lesson = found(await Lesson.findByPk(known.id));
     refuseStrayField(input, lesson.opens);
     const opens = await openingOf(ctx, input, lesson, workroom.timeZone);
+    const isAsBefore = lesson.title === input.title && lesson.isPreview === input.isPreview && isDeepStrictEqual(lesson.opens, opens);
     await lesson.update({
       title: input.title,
       minutes: input.minutes,
@@ -26,6 +28,7 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
       opens,
       opensAt: opens.rule === 'on-date' ? instantOfWall(opens.wall, opens.zone) : null,
       checkpoint: checkpointOf(input),
+      timetableRevision: lesson.timetableRevision + (isAsBefore ? 0 : 1),
     });
     await requireOpenable(locked, ({ part }) => {
       if (part !== lesson.position) return input.asksForPhoto ? 'wall' : 'asksForPhoto';
