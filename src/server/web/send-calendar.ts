@@ -1,5 +1,5 @@
 import { config } from '#server/config.ts';
-import { calendarFile } from '#server/presenters/calendar-file.ts';
+import { calendarFile } from '#server/web/calendar-file.ts';
 import type { SeatTimetable } from '#server/queries/timetable/seat-timetable.ts';
 
 /** A timetable as a calendar file, for a download or for a calendar that reads it again and again. */

@@ -3,7 +3,7 @@ import { beforeEach, describe, expect, test } from 'vitest';
 import { LessonSettingsForm } from '#contracts/workroom.ts';
 import { calendarKey, opensCalendar, seatOfKey } from '#server/auth/calendar-key.ts';
 import { Enrolment, Lesson, Media, ProgressPhoto, WorkroomHelper, type Series, type User } from '#server/models/index.ts';
-import { calendarFile } from '#server/presenters/calendar-file.ts';
+import { calendarFile } from '#server/web/calendar-file.ts';
 import { planTimetable } from '#server/queries/timetable/plan-timetable.ts';
 import { seatTimetable } from '#server/queries/timetable/seat-timetable.ts';
 import { renewCalendar } from '#server/use-cases/timetable/renew-calendar.ts';
