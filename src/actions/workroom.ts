@@ -53,7 +53,8 @@ export const workroom = {
   }),
   movePart: formAction(MoveLessonForm, async (input, ctx) => {
     const part = await moveLesson(ctx, input);
-    return { to: seriesAt(part.series, `#${input.by ?? 'part'}-${part.publicId}`), said: `“${part.title}” is now Part ${part.number}.` };
+    const undo = part.from === part.number ? '' : `?moved=${part.publicId}&from=${part.from}`;
+    return { to: `${seriesAt(part.series)}${undo}#${input.by ?? 'part'}-${part.publicId}`, said: `“${part.title}” is now Part ${part.number}.` };
   }),
   takeOutPart: formAction(LessonForm, async ({ lesson }, ctx) => {
     const part = await takeOutLesson(ctx, lesson);

@@ -93,6 +93,8 @@ export const MoveLessonForm = z.object({
   lesson: publicId,
   by: z.enum(['up', 'down']).optional(),
   to: wholeNumber('Say which number the part shall have.', 1, 99).optional(),
+  /** She has read that a part would open before an earlier one. */
+  anyway: z.literal('yes').optional(),
 }).refine(({ by, to }) => by !== undefined || to !== undefined, { path: ['to'], message: 'Say which number the part shall have.' });
 export type MoveLessonInput = z.output<typeof MoveLessonForm>;
 

@@ -11,6 +11,15 @@ import type { SeatTimetable } from '#server/queries/timetable/seat-timetable.ts'
 export function calendarFile({ seat, series, days }: SeatTimetable, publicUrl: string, now: Date): string {
   const { name } = titleHalves(series.title);
   const calendar = ical({ name: `Fellmark: ${name}`, prodId: { company: 'Fellmark', product: 'Timetable', language: 'EN' }, method: ICalCalendarMethod.PUBLISH, ttl: 3_600 });
+  // A calendar without any event is none (RFC 5545, 3.6), so the day of the seat is always in it.
+  calendar.createEvent({
+    id: `begins-${seat.publicId}@fellmark`,
+    start: seat.startedAt,
+    stamp: now,
+    summary: `${name} begins: your seat is yours`,
+    url: `${publicUrl}/series/${series.slug}`,
+    transparency: ICalEventTransparency.TRANSPARENT,
+  });
   for (const day of days) {
     if (day.when !== 'at') continue;
     calendar.createEvent({

@@ -35,7 +35,7 @@ const file = async (): Promise<string> => {
   const timetable = await seatTimetable(seat.publicId, NOW);
   return timetable === null ? '' : calendarFile(timetable, 'https://fellmark.example', NOW);
 };
-const events = async (): Promise<ICAL.Event[]> => new ICAL.Component(ICAL.parse(await file()) as unknown[]).getAllSubcomponents('vevent').map((component) => new ICAL.Event(component));
+const events = async (): Promise<ICAL.Event[]> => new ICAL.Component(ICAL.parse(await file()) as unknown[]).getAllSubcomponents('vevent').map((component) => new ICAL.Event(component)).filter(({ uid }) => uid.startsWith('opens-'));
 
 describe('the calendar file of a seat', () => {
   test('holds the parts whose day is known, in UTC, whatever clock the machine has', async () => {
@@ -73,6 +73,11 @@ describe('the calendar file of a seat', () => {
     const media = await Media.create({ ownerId: student.id, kind: 'photo', state: 'ready', originalName: 'loom.jpg', width: 4, height: 3, files: {}, detail: {} });
     await ProgressPhoto.create({ enrolmentId: seat.id, lessonId: asked.id, mediaId: media.id, verdict: 'weave-on', verdictAt: new Date('2026-12-05T17:30:00Z') });
     expect((await events()).map(({ startDate }) => startDate.toString())).toContain('2026-12-05T17:30:00Z');
+  });
+
+  test('is never without an event, though no part has a day', async () => {
+    await Lesson.update({ opens: { rule: 'at-once' }, opensAt: null }, { where: { seriesId: series.id } });
+    expect(new ICAL.Component(ICAL.parse(await file()) as unknown[]).getAllSubcomponents('vevent').map((component) => new ICAL.Event(component).summary)).toEqual(['Low Tide begins: your seat is yours']);
   });
 
   test('ends with the seat', async () => {

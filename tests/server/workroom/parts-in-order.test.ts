@@ -66,6 +66,28 @@ describe('the order of the parts', () => {
     await expect(moveLesson(ctx, { lesson: part(0).publicId, to: 2 })).rejects.toMatchObject({ code: 'CONFLICT', says: 'This part was taken out. Put it back first.' });
   });
 
+  describe('that would let a part open too early', () => {
+    beforeEach(async () => {
+      await part(1).update({ opens: { rule: 'after-seat', days: 4 } });
+      await part(2).update({ opens: { rule: 'after-seat', days: 7 } });
+      await part(3).update({ opens: { rule: 'after-seat', days: 9 } });
+    });
+
+    test('is told before anything is moved, and moved when it is wanted all the same', async () => {
+      await expect(moveLesson(ctx, { lesson: part(2).publicId, to: 2 })).rejects.toMatchObject({ code: 'VALIDATION', fields: { anyway: 'Nothing was moved yet. Part 3 would open 3 days before Part 2.' } });
+      expect((await titles()).join('')).toBe('ABCD');
+      await expect(moveLesson(ctx, { lesson: part(2).publicId, to: 2, anyway: 'yes' })).resolves.toMatchObject({ number: 2, from: 3 });
+      expect((await titles()).join('')).toBe('ACBD');
+    });
+
+    test('is not told again of what was so before, nor when a part comes to its place', async () => {
+      await moveLesson(ctx, { lesson: part(2).publicId, to: 2, anyway: 'yes' });
+      await moveLesson(ctx, { lesson: part(0).publicId, to: 1 });
+      await moveLesson(ctx, { lesson: part(2).publicId, to: 3 });
+      expect((await titles()).join('')).toBe('ABCD');
+    });
+  });
+
   test('a series holds sixty parts', async () => {
     for (let count = 4; count < 60; count += 1) await Lesson.create({ seriesId: series.id, position: count + 1, title: `Part ${count + 1}`, opens: { rule: 'at-once' } });
     await expect(addLesson(ctx, { series: series.slug, title: 'One more' })).rejects.toMatchObject({ code: 'CONFLICT', says: 'A series holds at most 60 parts.' });

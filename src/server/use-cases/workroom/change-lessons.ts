@@ -1,12 +1,18 @@
 /** The order of the parts: putting one in, moving, taking out, putting back. */
 import { Op } from 'sequelize';
 import type { MoveLessonInput, NewLessonInput } from '#contracts/workroom.ts';
+import { outOfOrder } from '#core/timetable/out-of-order.ts';
 import type { Context } from '#server/context.ts';
-import { AppError } from '#server/errors.ts';
+import { AppError, fieldError } from '#server/errors.ts';
 import { Enrolment, Lesson, type Series } from '#server/models/index.ts';
 import { placeOf, type PartPlace } from './_part-place.ts';
 import { requireOpenable } from './_require-openable.ts';
 import { ownLesson, ownSeries, withSeriesLocked } from './_own-series.ts';
+
+/** A part after it was moved, with the number it had. */
+export interface PartMoved extends PartPlace {
+  readonly from: number;
+}
 
 const MOST_PARTS = 60;
 const SERIES_IS_FULL = `A series holds at most ${MOST_PARTS} parts.`;
@@ -25,19 +31,31 @@ export async function addLesson(ctx: Context, input: NewLessonInput): Promise<Pa
 /**
  * Moves a part by one place, or gives it the number `to`; the others make room. A number beyond the last puts it at
  * the end; the first stays first when moved up, the last last.
- * @throws CONFLICT for a part that was taken out, or when a part of an open series could then never open.
+ * @throws CONFLICT for a part that was taken out, or when a part of an open series could then never open; VALIDATION at
+ * `anyway` when a part would open before an earlier one and did not before, unless she wants it anyway.
  */
-export async function moveLesson(ctx: Context, input: MoveLessonInput): Promise<PartPlace> {
+export async function moveLesson(ctx: Context, input: MoveLessonInput): Promise<PartMoved> {
   const { lesson: known, series } = await ownLesson(ctx, input.lesson);
   return withSeriesLocked(series, async (locked) => {
     const inOrder = await partsInOrder(series.id);
     const moved = inOrder.find(({ id }) => id === known.id);
     if (moved === undefined) throw new AppError('CONFLICT', { says: 'This part was taken out. Put it back first.' });
+    const from = moved.position;
+    const early = earlyParts(inOrder, ctx.clock.now());
     const to = input.to ?? moved.position + (input.by === 'up' ? -1 : 1);
     await putAt(inOrder.filter(({ id }) => id !== known.id), moved, Math.max(1, to));
     await requireOpenable(locked);
-    return placeOf(series, moved);
+    const news = earlyParts(await partsInOrder(series.id), ctx.clock.now()).filter(({ key }) => !early.some((one) => one.key === key));
+    if (news.length > 0 && input.anyway !== 'yes') throw fieldError('anyway', `Nothing was moved yet. ${news.map(({ says }) => says).join(' ')}`);
+    return { ...placeOf(series, moved), from };
   });
+}
+
+/** Parts that who starts now could open before one in front of them; `key` names the pair whatever their numbers are. */
+function earlyParts(lessons: readonly Lesson[], now: Date): { readonly key: string; readonly says: string }[] {
+  const idOf = (number: number): string => lessons[number - 1]?.publicId ?? '';
+  return outOfOrder(lessons.map(({ publicId, title, opens, isPreview }, index) => ({ publicId, number: index + 1, title, opens, isPreview })), now)
+    .map(({ part, earlier, says }) => ({ key: `${idOf(part)} ${idOf(earlier)}`, says }));
 }
 
 /**
