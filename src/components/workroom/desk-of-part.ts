@@ -1,6 +1,7 @@
 /** What the pages of a series and its parts draw alike. */
 import type { SitePerson } from '#components/site/person.ts';
 import { amountChoices, type AmountGroup } from '#core/craft/amount-choices.ts';
+import { exampleLooms } from '#core/craft/fitting/example-looms.ts';
 import { FIGURE_KINDS } from '#core/craft/figures/figure-kinds.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { titleHalves } from '#core/series/title.ts';
@@ -20,6 +21,15 @@ export function sayableOf({ media }: Pick<LessonDesk, 'media'>, amounts: readonl
     figures: FIGURE_KINDS.map((kind) => ({ value: kind, label: capital(kind.replaceAll('-', ' ')) })),
     media: media.map(({ kind, name, title }) => ({ value: `${kind}/${name}`, label: `${capital(kind)}: ${title === '' ? name : title}` })),
   };
+}
+
+/** Whose eyes a part can be seen with: its teacher's, those of an example loom, each student's. */
+export function eyesOfDesk({ pattern, seats }: Pick<LessonDesk, 'pattern' | 'seats'>, units: Units): { value: string; label: string }[] {
+  return [
+    { value: 'pattern', label: 'Your pattern piece' },
+    ...exampleLooms(pattern, units).map(({ name, label }) => ({ value: name, label })),
+    ...seats.map(({ seat, studentName }) => ({ value: seat, label: studentName })),
+  ];
 }
 
 export function crumbsOf({ series: { slug, title } }: Pick<LessonDesk, 'series'>): { href: string; label: string }[] {

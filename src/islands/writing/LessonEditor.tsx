@@ -42,7 +42,8 @@ export function LessonEditor({ lesson, revision, remarks, lineWords, isEmpty, fi
   const [picture, setPicture] = useState<{ file: File; place: number } | null>(null);
   const [broughtBack, setBroughtBack] = useState<string | null>(null);
   const textNow = useCallback(() => shown.current?.view.state.doc.toString() ?? box.current?.querySelector('textarea')?.value ?? '', []);
-  const { state, change, save } = useDraft(textNow, lesson, revision, remarks);
+  const placeNow = useCallback(() => shown.current?.view.state.selection.main.head ?? 0, []);
+  const { state, change, save } = useDraft(textNow, placeNow, lesson, revision, remarks);
 
   const onOpen = (opened: OpenText, area: HTMLTextAreaElement) => {
     shown.current = opened;

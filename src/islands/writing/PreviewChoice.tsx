@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useRef, useState } from 'react';
 import { Button } from '#islands/ui/Button.tsx';
 import { Select } from '#islands/ui/Field.tsx';
-import { DRAFT_KEPT } from '#islands/writing/draft-kept.ts';
+import { DRAFT_KEPT, type DraftKeptDetail } from '#islands/writing/draft-kept.ts';
 
 interface PreviewChoiceProps {
   /** Address of the preview as a page of its own. */
@@ -17,7 +17,7 @@ export function PreviewChoice({ address, choices, drawnId }: PreviewChoiceProps)
   const [as, setAs] = useState(choices[0]?.value ?? 'pattern');
   const [says, setSays] = useState('');
   const asked = useRef(0);
-  const draw = useCallback((whose: string) => {
+  const draw = useCallback((whose: string, anchor: string | null = null) => {
     asked.current += 1;
     const turn = asked.current;
     void fetchPage(`${address}?as=${encodeURIComponent(whose)}`).then((page) => {
@@ -27,12 +27,13 @@ export function PreviewChoice({ address, choices, drawnId }: PreviewChoiceProps)
       if (fresh === null || fresh === undefined) setSays('It could not be drawn just now. What you wrote is not lost.');
       else {
         document.getElementById(drawnId)?.replaceWith(document.importNode(fresh, true));
+        if (anchor !== null) bringIntoSight(document.getElementById(anchor));
         setSays('');
       }
     });
   }, [address, drawnId]);
   useEffect(() => {
-    const onKept = () => draw(as);
+    const onKept = (event: Event) => draw(as, event instanceof CustomEvent ? (event.detail as DraftKeptDetail).anchor : null);
     document.addEventListener(DRAFT_KEPT, onKept);
     return () => document.removeEventListener(DRAFT_KEPT, onKept);
   }, [as, draw]);
@@ -43,6 +44,14 @@ export function PreviewChoice({ address, choices, drawnId }: PreviewChoiceProps)
       <p role="status" className="small">{says}</p>
     </form>
   );
+}
+
+/** Only the column of the preview is moved, and only when what is being written lies outside it: the page itself never jumps. */
+function bringIntoSight(drawn: HTMLElement | null): void {
+  const column = drawn?.closest('.writing-preview');
+  if (drawn === null || column === null || column === undefined || column.scrollHeight <= column.clientHeight) return;
+  const [inner, outer] = [drawn.getBoundingClientRect(), column.getBoundingClientRect()];
+  if (inner.top < outer.top || inner.top > outer.bottom - outer.height / 3) column.scrollTop += inner.top - outer.top - outer.height / 6;
 }
 
 /** The page as a document whose scripts do not run. A string of markup is never made into nodes here. */

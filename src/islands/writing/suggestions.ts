@@ -12,16 +12,20 @@ const FIGURES = section('Figures', 2);
 const MEDIA = section('Videos and pictures', 3);
 
 export function suggestions(sayable: Sayable): Extension {
-  const palette = paletteOf(sayable);
   return [
     autocompletion({
-      override: [(context) => valueOf(context, sayable), (context) => tagOrPalette(context, palette)],
+      override: [(context) => suggestionsFor(context, sayable)],
       icons: false, maxRenderedOptions: 300,
       // The list opens only where it is asked for, so its Enter may follow as fast as a hand can.
       interactionDelay: 0,
     }),
     keymap.of([{ key: 'Mod-k', preventDefault: true, run: startCompletion }]),
   ];
+}
+
+/** What can stand at a place; null when nothing is offered there. */
+export function suggestionsFor(context: CompletionContext, sayable: Sayable): CompletionResult | null {
+  return valueOf(context, sayable) ?? tagOrPalette(context, sayable);
 }
 
 /** Within the quotes of an attribute: the names that can stand there. */
@@ -38,12 +42,12 @@ function valueOf(context: CompletionContext, { amounts, figures, media }: Sayabl
 }
 
 /** A tag that is begun, a slash at the start of a line, or whatever is asked for by key. */
-function tagOrPalette(context: CompletionContext, palette: readonly Completion[]): CompletionResult | null {
+function tagOrPalette(context: CompletionContext, sayable: Sayable): CompletionResult | null {
   const begun = context.matchBefore(/<[A-Z]?\w*$/) ?? context.matchBefore(/^\/[\w -]*$/);
   if (begun === null && !context.explicit) return null;
   const from = begun?.from ?? context.pos;
   // The sign that opened the list is no part of what is looked for.
-  return { from: begun === null ? from : from + 1, options: palette.map((option) => withoutSign(option, begun === null ? 0 : 1)), validFor: /^[\w -]*$/ };
+  return { from: begun === null ? from : from + 1, options: paletteOf(sayable).map((option) => withoutSign(option, begun === null ? 0 : 1)), validFor: /^[\w -]*$/ };
 }
 
 function withoutSign(option: Completion, sign: number): Completion {

@@ -1,8 +1,9 @@
 import { useCallback, useEffect, useMemo, useReducer, useRef } from 'react';
 import type { DraftBehind, DraftKept, TextRemarks } from '#contracts/workroom.ts';
 import { writeCopy } from '#islands/writing/device-copy.ts';
-import { DRAFT_KEPT } from '#islands/writing/draft-kept.ts';
+import { DRAFT_KEPT, type DraftKeptDetail } from '#islands/writing/draft-kept.ts';
 import { beginEditing, editingAfter, isUnsaved, maySave, type EditEvent, type Editing } from '#islands/writing/editing.ts';
+import { anchorAt } from '#islands/writing/preview-anchor.ts';
 import { Reader } from '#islands/writing/reader.ts';
 
 /** A pause in the typing after which the text is read, kept on this device, and sent to be kept. */
@@ -20,7 +21,7 @@ interface Draft {
 }
 
 /** Follows a text on the screen: reads it after a pause, keeps it by itself, and holds it on this device until it is kept. */
-export function useDraft(textNow: () => string, lesson: string, revision: number, remarks: TextRemarks): Draft {
+export function useDraft(textNow: () => string, placeNow: () => number, lesson: string, revision: number, remarks: TextRemarks): Draft {
   const [state, change] = useReducer(editingAfter, beginEditing(revision, remarks));
   const now = useRef(state);
   now.current = state;
@@ -48,8 +49,11 @@ export function useDraft(textNow: () => string, lesson: string, revision: number
 
   const { keptEdits, remarks: { problems } } = state;
   useEffect(() => {
-    if (keptEdits > 0 && problems.length === 0) document.dispatchEvent(new Event(DRAFT_KEPT));
-  }, [keptEdits, problems.length]);
+    if (keptEdits > 0 && problems.length === 0) {
+      const detail: DraftKeptDetail = { anchor: anchorAt(textNow(), placeNow()) };
+      document.dispatchEvent(new CustomEvent(DRAFT_KEPT, { detail }));
+    }
+  }, [keptEdits, placeNow, problems.length, textNow]);
 
   return { state, change, save };
 }

@@ -86,13 +86,23 @@ describe('a series on its teacher’s table', () => {
 
 describe('a preview', () => {
   test('is seen with a student’s piece and units, and with the pattern when the seat is not of this series', async () => {
+    const own = { id: series.id, pattern: null };
     const maud = await buildUser({ name: 'Maud Ellery', units: 'in' });
     const seat = await buildEnrolment({ seriesId: series.id, userId: maud.id });
     await MyPieceRow.create({ enrolmentId: seat.id, data: { widthMm: 300 } });
-    expect(await seenAs(series.id, seat.publicId, 'cm')).toEqual({ as: seat.publicId, studentName: 'Maud Ellery', mine: { widthMm: 300 }, units: 'in' });
+    expect(await seenAs(own, seat.publicId, 'cm')).toEqual({ as: seat.publicId, studentName: 'Maud Ellery', loom: null, mine: { widthMm: 300 }, units: 'in' });
     const foreign = await buildEnrolment();
     const closed = await buildEnrolment({ seriesId: series.id, state: 'closed' });
-    for (const as of [foreign.publicId, closed.publicId, 'nobody', null]) expect(await seenAs(series.id, as, 'cm')).toMatchObject({ as: 'pattern', studentName: null });
+    for (const as of [foreign.publicId, closed.publicId, 'nobody', null]) expect(await seenAs(own, as, 'cm')).toMatchObject({ as: 'pattern', studentName: null });
+  });
+});
+
+describe('an example loom', () => {
+  test('is seen with its own measures where the piece is woven on a frame, and in the other units anywhere', async () => {
+    const pattern = await lowTide();
+    expect(await seenAs({ id: series.id, pattern }, 'loom-small', 'cm')).toMatchObject({ loom: 'A small loom, 30 cm inside', mine: { widthMm: 200 }, units: 'cm' });
+    expect(await seenAs({ id: series.id, pattern }, 'other-units', 'cm')).toMatchObject({ mine: {}, units: 'in' });
+    expect(await seenAs({ id: series.id, pattern: null }, 'loom-small', 'cm')).toMatchObject({ as: 'pattern', loom: null });
   });
 });
 
