@@ -52,7 +52,7 @@ test('hostile texts typed into the editor run nowhere and are told with line and
   await expectFaultless(page);
 });
 
-test('by keyboard alone: a step and an amount from the palette, the remark by F8, out by Tab', async ({ page }) => {
+test('by keyboard alone: a step and an amount from the palette, a remark, and out by Tab', async ({ page }) => {
   await page.goto('/workroom/series/low-tide');
   await page.getByRole('link', { name: 'First rows of tabby', exact: true }).click();
   await textField(page).focus();
@@ -69,7 +69,7 @@ test('by keyboard alone: a step and an amount from the palette, the remark by F8
   await page.keyboard.press('Enter');
   await expect(textField(page)).toContainText('Wind <Amount of="cord"/>');
   await page.keyboard.type(' {x}');
-  await expect(remarks(page).getByText(/Curly braces mean code/)).toBeVisible();
+  await expect(remarks(page).getByText(/Curly braces mean code/).first()).toBeVisible();
   await page.keyboard.press('Tab');
   await expect(textField(page)).not.toBeFocused();
   // What stood here before stands again, so that other journeys find it.
@@ -96,4 +96,46 @@ test('what is typed without a line survives a reload and goes out when there is 
   await expectText(page, 'Wind it tight.');
   await expect(inMain(page).getByText(/could not send/)).toHaveCount(0);
   await context.close();
+});
+
+test('a picture that is dropped asks what it shows, goes into the text and stands in the preview', async ({ page }) => {
+  await openNewPart(page);
+  await fillText(page, 'Look at the edge.');
+  await page.getByTestId('picture-chooser').setInputFiles({ name: 'Left edge.png', mimeType: 'image/png', buffer: await squarePicture(page) });
+  const dialog = page.getByRole('dialog', { name: 'What does the picture show?' });
+  await dialog.getByRole('button', { name: 'Put it in' }).click();
+  await expect(dialog.getByText(/What it shows is missing/)).toBeVisible();
+  await dialog.getByLabel('In words, for those who do not see it').fill('A straight left edge');
+  await dialog.getByRole('button', { name: 'Put it in' }).click();
+  await expect(textField(page)).toContainText('<Picture name="left-edge" alt="A straight left edge"/>');
+  await expect(page.locator('#preview-drawn').getByRole('img', { name: 'A straight left edge' })).toBeVisible();
+});
+
+/** A photo as a browser writes one. */
+async function squarePicture(page: Page): Promise<Buffer> {
+  const bytes = await page.evaluate(async () => {
+    const canvas = document.createElement('canvas');
+    canvas.width = canvas.height = 64;
+    canvas.getContext('2d')?.fillRect(8, 8, 48, 48);
+    const blob = await new Promise<Blob | null>((resolve) => { canvas.toBlob(resolve, 'image/png'); });
+    return [...new Uint8Array((await blob?.arrayBuffer()) ?? new ArrayBuffer(0))];
+  });
+  return Buffer.from(bytes);
+}
+
+test('a text of 170 kB is typed into without waiting, and its remarks come', async ({ page }) => {
+  test.setTimeout(120_000);
+  await openNewPart(page);
+  const long = Array.from({ length: 1_400 }, (_, number) => `Row ${number} of the tabby goes over the first end, under the second, and so on to the right edge of the cloth, where it turns.`).join('\n\n');
+  await textField(page).evaluate((field, text) => {
+    const data = new DataTransfer();
+    data.setData('text/plain', text);
+    field.dispatchEvent(new ClipboardEvent('paste', { clipboardData: data, bubbles: true, cancelable: true }));
+  }, long);
+  await expect(page.getByText(/^Saved \d\d:\d\d$/)).toBeVisible({ timeout: 30_000 });
+  await textField(page).focus();
+  await page.keyboard.press('Control+End');
+  await page.keyboard.type('\n\nEnd {x}.');
+  await expect(remarks(page).getByText(/Curly braces mean code/)).toBeVisible();
+  await expect(remarks(page).getByRole('link', { name: 'Line 2801' })).toBeVisible();
 });
