@@ -96,7 +96,7 @@ bare.describe('a film', () => {
     await student.getByRole('link', { name: /Wind/ }).click();
     await expect.poll(place).toBeGreaterThanOrEqual(10);
     await student.getByText('The spoken words').click();
-    await expect(student.getByRole('button', { name: 'Lay the frame flat.' })).toBeVisible();
+    await expect(student.getByRole('button', { name: 'Lay the frame flat.' }).first()).toBeVisible();
     const kept = student.waitForResponse('**/api/video-place');
     await student.getByRole('button', { name: 'Pause' }).click();
     expect((await kept).status()).toBe(200);
