@@ -13,7 +13,7 @@ const prose = `${'You wind one long thread round the nails, up and down, until a
 const longest = prose.repeat(Math.floor(LIMITS.sourceLength / prose.length));
 const read = parseLessonText(lesson);
 
-/** All seven parts of a series again and again up to the greatest length; each step with a name of its own. */
+/** All seven parts of a series again and again up to the greatest length; it is refused for its many steps, after all of it was read. */
 const folder = new URL('../../content/series/low-tide/', import.meta.url);
 const series = readdirSync(folder).filter((name) => name.endsWith('.mdx')).map((name) => readFileSync(new URL(name, folder), 'utf8')).join('\n\n');
 const realistic = Array.from({ length: 3 }, (_, turn) => series.replace(/<Step id="/g, `<Step id="t${String(turn)}-`).replace(/ {2}\n/g, '\n')).join('\n\n');
