@@ -5,6 +5,8 @@ import type { LessonProblem } from '#core/lesson-text/problem.ts';
 
 const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
 const publicId = z.string().regex(/^[0-9a-z]{26}$/);
+/** Signs a draft may have; a little more than a text that can be published, so that one that grew too long is not lost. */
+export const LONGEST_DRAFT = 220_000;
 const revision = z.coerce.number().int().min(0);
 const ticked = z.string().optional().transform((value) => value !== undefined);
 const words = (name: string, most: number) =>
@@ -42,7 +44,7 @@ export type NewLessonInput = z.output<typeof NewLessonForm>;
 export const LessonDraftForm = z.object({
   lesson: publicId,
   revision,
-  source: z.string({ required_error: 'The text did not arrive, so nothing was changed.' }).max(220_000, 'A part holds at most 200,000 characters. Make two of it.'),
+  source: z.string({ required_error: 'The text did not arrive, so nothing was changed.' }).max(LONGEST_DRAFT, 'A part holds at most 200,000 characters. Make two of it.'),
 });
 export type LessonDraftInput = z.output<typeof LessonDraftForm>;
 

@@ -13,6 +13,11 @@ export function slugOf(words: string): string {
   return slug === '' ? 'section' : slug;
 }
 
+/** Words as a name of plain letters `a` to `z`, digits and single hyphens within, of at most `most` characters; `otherwise` when nothing is left. */
+export function plainSlug(words: string, most: number, otherwise: string): string {
+  return slugOf(words).replace(/[^a-z0-9-]/g, '').replace(/-{2,}/g, '-').slice(0, most).replace(/^-|-$/g, '') || otherwise;
+}
+
 /** The slug of `words`, with a number behind it when `taken` has it already; adds it to `taken`. */
 export function uniqueSlug(words: string, taken: Set<string>): string {
   const base = slugOf(words);

@@ -37,6 +37,8 @@ export const RATE_RULES = {
   picture: { name: 'picture', limit: 120, windowSeconds: 3_600 },
   /** Videos begun by one teacher. */
   video: { name: 'video', limit: 60, windowSeconds: 3_600 },
+  /** Series taken along or brought in by one teacher. */
+  seriesFolder: { name: 'series-folder', limit: 60, windowSeconds: 3_600 },
   /** Drafts kept by themselves, of one teacher. */
   lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },
 } as const satisfies Record<string, RateRule>;

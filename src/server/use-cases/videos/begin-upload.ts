@@ -1,4 +1,3 @@
-import { Op } from 'sequelize';
 import type { BeginVideoInput } from '#contracts/video.ts';
 import { VIDEO_LIMITS, videoFault } from '#core/video/limits.ts';
 import type { Context } from '#server/context.ts';
@@ -7,6 +6,7 @@ import { AppError, found, signedIn } from '#server/errors.ts';
 import { displayName } from '#server/media/display-name.ts';
 import { Media, SeriesMedia, User, VideoUpload } from '#server/models/index.ts';
 import { ownLesson } from '#server/use-cases/workroom/_own-series.ts';
+import { requireVideoRoom } from './_video-room.ts';
 import { freeName } from './_video-name.ts';
 
 /**
@@ -24,7 +24,7 @@ export async function beginVideoUpload(ctx: Context, publicId: string, input: Be
   await withTransaction(async () => {
     // The person's row is the lock of her room: many uploads begun at once are counted one after the other.
     found(await User.findByPk(actor.userId, { lock: true }));
-    await requireQuota(actor.userId, input.byteCount);
+    await requireVideoRoom(actor.userId, input.byteCount);
     const media = await Media.create({
       publicId,
       ownerId: actor.userId,
@@ -43,15 +43,4 @@ export async function beginVideoUpload(ctx: Context, publicId: string, input: Be
       await kept.update({ draftMediaId: media.id });
     }
   });
-}
-
-async function requireQuota(ownerId: number, byteCount: number): Promise<void> {
-  const videos = await Media.findAll({ where: { ownerId, kind: 'video', state: { [Op.ne]: 'failed' } }, attributes: ['state', 'byteCount'] });
-  if (videos.filter(({ state }) => state === 'created').length >= VIDEO_LIMITS.maxUnfinished) {
-    throw new AppError('CONFLICT', { says: `${VIDEO_LIMITS.maxUnfinished} videos of yours are on their way already. Let one arrive, or stop one, first.` });
-  }
-  const used = videos.reduce((sum, video) => sum + video.byteCount, 0);
-  if (used + byteCount > VIDEO_LIMITS.maxBytesOfTeacher) {
-    throw new AppError('CONFLICT', { says: 'Your videos together may be 60 GB, and this one would not go in. Take out one you do not need, or write to us.' });
-  }
 }

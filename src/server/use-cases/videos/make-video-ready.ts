@@ -106,7 +106,9 @@ async function keep(media: Media, { files, byteCount, width, height, durationMs 
   const poster = Object.hasOwn(files, DEFAULT_POSTER) ? DEFAULT_POSTER : 'still-1';
   await withTransaction(async () => {
     const words = await wordsOfReplaced(media.id, durationMs);
-    await media.update({ state: 'ready', files, byteCount, width, height, durationMs, progressPermille: 1_000, detail: { ...words, poster } });
+    // A film that came with its series has its captions already.
+    const draftDetail = media.draftDetail === null ? null : { poster, ...media.draftDetail };
+    await media.update({ state: 'ready', files, byteCount, width, height, durationMs, progressPermille: 1_000, detail: { ...words, poster }, draftDetail });
     await VideoUpload.destroy({ where: { mediaId: media.id } });
   });
 }

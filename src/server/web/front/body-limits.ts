@@ -21,6 +21,7 @@ export interface BodyLimit {
 export const BODY_LIMITS: readonly BodyLimit[] = [
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?(?:photos?|pictures?)(?:\/|$)/, maxBytes: 30 * MIB, withinSeconds: 600 },
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?videos?(?:\/|$)/, maxBytes: 20 * MIB, withinSeconds: 600 },
+  { path: /^\/workroom\/series\/bring-in$/, maxBytes: 501 * MIB, withinSeconds: 1_800 },
   { path: /^\/(?:sign-in|sign-up|sign-out|forgotten|new-password|confirm|prove|account)(?:\/|$)/, maxBytes: 4 * KIB, withinSeconds: 30 },
   { path: /^\/api\/reckon$/, maxBytes: 64 * KIB, withinSeconds: 30 },
   { path: /^\/api\/payments\/events$/, maxBytes: 256 * KIB, withinSeconds: 30 },
