@@ -1,10 +1,10 @@
 /**
  * Whether a YAML text may nest so deep that reading it takes all memory: a megabyte of opening brackets ends the process
  * of the parser we use. Judged by signs alone, whatever they stand in, so words that only look like nesting count too;
- * the list of a whole series has a few hundred brackets at most, and no line of bare dashes of this length.
+ * the list of a whole series has a few hundred brackets at most, and never so many marks in a row.
  */
 const MOST_BRACKETS = 1_000;
-const MANY_MARKS_IN_A_ROW = /(?:[-?:][ \t]+){50}/;
+const MANY_MARKS_IN_A_ROW = /(?:[-?:&!*]\S{0,100}\s+){50}/;
 
 export function nestsTooDeep(yaml: string): boolean {
   let brackets = 0;

@@ -74,7 +74,7 @@ async function writeMedia(actor: Actor, series: Series, lessons: readonly Lesson
   }
   for (const { publicId, entry: { name, title, part, alt, file }, photo } of pictures) {
     const media = await Media.create({ publicId, ownerId: actor.userId, kind: 'picture', state: 'ready', originalName: nameOfFile(file), ...sizesOf(photo), detail: alt === undefined ? {} : { alt } });
-    await SeriesMedia.create({ seriesId: series.id, name, title, lessonId: lessonOf(part), draftMediaId: media.id });
+    await SeriesMedia.create({ seriesId: series.id, name, title, lessonId: lessonOf(part), mediaId: media.id });
   }
 }
 
