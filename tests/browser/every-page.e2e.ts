@@ -47,6 +47,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/series/new': [['ilse', '/workroom/series/new']],
   '/workroom/series/bring-in': [['ilse', '/workroom/series/bring-in']],
   '/workroom/series/[slug]': [['ilse', '/workroom/series/low-tide'], ['teodor', '/workroom/series/three-knotted-cords']],
+  '/workroom/series/[slug]/before': [['ilse', '/workroom/series/low-tide/before']],
   '/workroom/series/[slug]/timetable': [['ilse', '/workroom/series/low-tide/timetable']],
   '/workroom/series/[slug]/folder': [['ilse', '/workroom/series/low-tide/folder']],
   '/workroom/series/[slug]/piece': [['ilse', '/workroom/series/low-tide/piece'], ['teodor', '/workroom/series/three-knotted-cords/piece']],

@@ -107,6 +107,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/series/[slug]/folder': [{ at: '/workroom/series/low-tide/folder', answers: OWNER }],
   '/workroom/series/[slug]/piece': [{ at: '/workroom/series/low-tide/piece', answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]': [{ at: ofPart(''), answers: OWNER }],
+  '/workroom/series/[slug]/before': [{ at: '/workroom/series/low-tide/before', answers: OWNER }],
   '/workroom/series/[slug]/timetable': [{ at: '/workroom/series/low-tide/timetable', answers: OWNER }, { at: '/workroom/series/low-tide/timetable?start=2027-02-31', answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]/gather': [{ at: ofPart('/gather'), answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]/preview': [{ at: ofPart('/preview'), answers: OWNER }],

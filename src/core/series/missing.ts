@@ -2,6 +2,8 @@
  * What a series still lacks before students may come in. Pure: it is handed what there is, and says what is not,
  * in the order in which a teacher would mend it.
  */
+import { contradictions } from '#core/gathering/contradictions.ts';
+import { listed } from '#core/listed.ts';
 import { openingFaults, type PartOpening } from '#core/series/opening-faults.ts';
 
 export interface SeriesInHand {
@@ -20,6 +22,17 @@ export interface TextRemark {
   readonly reason: string;
 }
 
+export interface ListedThing {
+  readonly kind: 'tool' | 'yarn' | 'material';
+  readonly name: string;
+  /** Null where an amount of the plan, or none, is given. */
+  readonly amountText: string | null;
+  readonly hasAmount: boolean;
+}
+
+/** Tools and stuff that can hurt; common practice, no source. */
+const CAN_HURT = /\b(scissors|shears|kni(?:fe|ves)|scalpel|blades?|razor|awl|saws?|drill|hammer|rotary cutter|mordants?|caustic|acid)\b/i;
+
 export interface PartInHand extends PartOpening {
   readonly title: string;
   readonly isPreview: boolean;
@@ -29,8 +42,12 @@ export interface PartInHand extends PartOpening {
   readonly textWarnings: readonly TextRemark[];
   readonly isEmpty: boolean;
   readonly stepCount: number;
-  /** Lines on its gathering list. */
-  readonly lineCount: number;
+  /** Its gathering list, in order. */
+  readonly list: readonly ListedThing[];
+  /** A caution stands in its text. */
+  readonly hasCaution: boolean;
+  /** Its photo has words on what the teacher looks for; true without a photo. */
+  readonly saysWhatToLookFor: boolean;
   /** Keys of amounts in the text that the piece's plan does not give. */
   readonly unknownAmounts: readonly string[];
   /** The same, of the gathering list. */
@@ -98,12 +115,24 @@ function worthALook({ story, techniques, parts }: SeriesInHand): Missing[] {
   if (parts.length === 0) return series;
   return [
     ...series,
-    ...(parts.every(({ lineCount }) => lineCount === 0) ? [noticed(null, 'parts', 'No part has a gathering list, so nobody knows before paying what she needs.')] : []),
+    ...(parts.every(({ list }) => list.length === 0) ? [noticed(null, 'parts', 'No part has a gathering list, so nobody knows before paying what she needs.')] : []),
     ...(parts.every(({ isPreview }) => !isPreview) ? [noticed(null, 'parts', 'No part is free to read. One that is lets people see how you teach.')] : []),
     ...(parts.every(({ hasCheckpoint }) => !hasCheckpoint) ? [noticed(null, 'parts', 'No part asks for a photo, so you see no loom before it is too late to mend.')] : []),
+    ...contradictions(parts.flatMap(({ number, list }) => list.filter(({ kind }) => kind === 'tool').map(({ name, amountText }) => ({ part: number, name, amountText }))))
+      .map(({ part, says }) => noticed(part, 'list', says)),
+    ...parts.flatMap(lookAtPart),
     ...parts.flatMap(({ number, isEmpty, textProblems, textWarnings, stepCount }) => [
       ...textWarnings.map(({ line, reason }) => ({ ...noticed(number, 'text', `Line ${line}: ${reason}`), line })),
       ...(!isEmpty && textProblems.length === 0 && stepCount === 0 ? [noticed(number, 'text', 'There is no step to tick.')] : []),
     ]),
+  ];
+}
+
+function lookAtPart({ number, list, hasCaution, saysWhatToLookFor, isEmpty, textProblems }: PartInHand): Missing[] {
+  const sharp = list.filter(({ name }) => CAN_HURT.test(name)).map(({ name }) => `“${name}”`);
+  return [
+    ...list.filter(({ hasAmount }) => !hasAmount).map(({ name }) => noticed(number, 'list', `“${name}” has no amount, so nobody knows how much to bring.`)),
+    ...(sharp.length > 0 && !hasCaution && !isEmpty && textProblems.length === 0 ? [noticed(number, 'text', `${listed(sharp)} can hurt, and no caution stands in the text.`)] : []),
+    ...(saysWhatToLookFor ? [] : [noticed(number, 'settings', 'It asks for a photo and does not say what you look for in it.')]),
   ];
 }

@@ -73,6 +73,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/series/new': 'teacher',
   '/workroom/series/bring-in': 'teacher',
   '/workroom/series/[slug]': 'teacher',
+  '/workroom/series/[slug]/before': 'teacher',
   '/workroom/series/[slug]/timetable': 'teacher',
   '/workroom/series/[slug]/piece': 'teacher',
   '/workroom/series/[slug]/folder': 'teacher',

@@ -3,6 +3,7 @@ import { amountOf } from '#core/craft/amounts.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
+import type { LessonNode } from '#core/lesson-text/tree.ts';
 import type { PartInHand, SeriesInHand } from '#core/series/missing.ts';
 import { GatheringItem, Lesson, PatternPiece, type Series } from '#server/models/index.ts';
 import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
@@ -25,13 +26,14 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
   const isUnknown = (key: string): boolean => piece !== null && plan?.ok === true && !amountOf(key, piece.data, plan.value).ok;
   const openings = partOpenings(lessons);
   const parts = lessons.map((lesson, index): PartInHand => {
-    const listed = items.filter(({ lessonId }) => lessonId === lesson.id);
+    const listed = items.filter(({ lessonId }) => lessonId === lesson.id).sort((a, b) => a.position - b.position);
     return {
       ...(openings[index] ?? { number: index + 1, opensAfterPart: null, hasCheckpoint: false, opensAt: null }),
       title: lesson.title,
       isPreview: lesson.isPreview,
       isEmpty: lesson.draftSource.trim() === '',
-      lineCount: listed.length,
+      list: listed.map(({ kind, name, amountKey, amountText }) => ({ kind, name, amountText, hasAmount: amountKey !== null || amountText !== null })),
+      saysWhatToLookFor: lesson.checkpoint === null || lesson.checkpoint.look.length > 0,
       unknownListAmounts: [...new Set(listed.flatMap(({ amountKey }) => (amountKey !== null && isUnknown(amountKey) ? [amountKey] : [])))],
       ...factsOfText(lesson.draftReading, media, isUnknown),
     };
@@ -45,14 +47,15 @@ export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHa
   };
 }
 
-type TextFacts = Pick<PartInHand, 'textProblems' | 'textWarnings' | 'stepCount' | 'unknownAmounts' | 'unknownMedia' | 'uncaptionedVideos'>;
+type TextFacts = Pick<PartInHand, 'textProblems' | 'textWarnings' | 'hasCaution' | 'stepCount' | 'unknownAmounts' | 'unknownMedia' | 'uncaptionedVideos'>;
 
 function factsOfText(text: LessonText | RefusedText, media: readonly SeriesMediaFile[], isUnknown: (key: string) => boolean): TextFacts {
-  if (!text.ok) return { textProblems: text.problems, textWarnings: [], stepCount: 0, unknownAmounts: [], unknownMedia: [], uncaptionedVideos: [] };
+  if (!text.ok) return { textProblems: text.problems, textWarnings: [], hasCaution: false, stepCount: 0, unknownAmounts: [], unknownMedia: [], uncaptionedVideos: [] };
   const named = (wanted: LessonText['media'][number]): SeriesMediaFile | undefined => media.find(({ kind, name }) => kind === wanted.kind && name === wanted.name);
   return {
     textProblems: [],
     textWarnings: text.warnings,
+    hasCaution: holdsCaution(text.tree.children),
     stepCount: text.steps.length,
     unknownAmounts: text.amounts.filter(isUnknown),
     unknownMedia: text.media.filter((wanted) => named(wanted) === undefined).map(({ name }) => name),
@@ -63,4 +66,8 @@ function factsOfText(text: LessonText | RefusedText, media: readonly SeriesMedia
 /** A video that is not there is missing as a whole. */
 function hasNoCaptions(video: SeriesMediaFile | undefined): boolean {
   return video !== undefined && (video.detail.cues ?? []).length === 0;
+}
+
+function holdsCaution(nodes: readonly LessonNode[]): boolean {
+  return nodes.some((node) => (node.type === 'component' && node.name === 'Caution') || ('children' in node && holdsCaution(node.children)));
 }
