@@ -1,8 +1,6 @@
 import { beforeEach, describe, expect, test } from 'vitest';
 import { LessonSettingsForm } from '#contracts/workroom.ts';
 import { AuditEntry, Enrolment, GatheringItem, Lesson, LessonVersion, PatternPiece, Series, type User } from '#server/models/index.ts';
-import { whatIsMissing } from '#core/series/missing.ts';
-import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 import { takeBackSeries } from '#server/use-cases/series/take-back-series.ts';
 import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatheringItem } from '#server/use-cases/workroom/change-gathering.ts';
@@ -171,32 +169,6 @@ describe('publishing', () => {
     await write(second, '<Amount of="band.sea.rows"/>', 1);
     await GatheringItem.create({ lessonId: first.id, position: 1, kind: 'tool', name: 'Card', amountKey: 'band.sea.cut' });
     await expect(publishSeries(ctx, series.slug)).rejects.toMatchObject({ says: expect.stringMatching(/gathering list asks for the amount “band\.sea\.cut”.*text asks for the amount “band\.sea\.rows”/) });
-  });
-});
-
-describe('before publishing', () => {
-  const says = async (): Promise<string[]> => whatIsMissing((await seriesInHand(await series.reload())).inHand).filter(({ blocks }) => !blocks).map(({ part, place, says: words }) => `${part ?? ''} ${place}: ${words}`);
-
-  test('what is doubtful in lists, texts and photos is told and does not block', async () => {
-    await makeReady();
-    await second.update({ checkpoint: { ask: 'Show your warped loom', look: [] } });
-    await GatheringItem.create({ lessonId: first.id, position: 1, kind: 'tool', name: 'Tapestry needle, blunt', amountText: '1' });
-    await GatheringItem.create({ lessonId: second.id, position: 1, kind: 'tool', name: 'Tapestry needle, pointed', amountText: '1' });
-    await GatheringItem.create({ lessonId: second.id, position: 2, kind: 'tool', name: 'Sharp scissors' });
-    expect(await says()).toEqual(expect.arrayContaining([
-      expect.stringMatching(/^2 list: It asks for “Tapestry needle, pointed”, Part 1 for “Tapestry needle, blunt”/),
-      '2 list: “Sharp scissors” has no amount, so nobody knows how much to bring.',
-      '2 text: “Sharp scissors” can hurt, and no caution stands in the text.',
-      '2 settings: It asks for a photo and does not say what you look for in it.',
-    ]));
-    await publishSeries(ctx, series.slug);
-  });
-
-  test('a caution in the text is enough', async () => {
-    await makeReady();
-    await GatheringItem.create({ lessonId: first.id, position: 1, kind: 'tool', name: 'Craft knife', amountText: '1' });
-    await write(first, '<Step id="cut">Cut the card.</Step>\n\n<Caution title="The knife">Cut away from your hand.</Caution>', 1);
-    expect((await first.reload()).draftReading.ok ? (await says()).filter((words) => words.includes('can hurt')) : 'not read').toEqual([]);
   });
 });
 
