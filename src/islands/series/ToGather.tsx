@@ -1,7 +1,8 @@
 /** Everything to gather for the piece as it is being tried: yarn by length and weight, then tools and what else. */
 import { amountOf } from '#core/craft/amounts.ts';
 import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
-import { craftOf, type Made } from '#core/craft/crafts.ts';
+import type { MadeOf } from '#core/craft/craft.ts';
+import { craftOf, type Piece, type Plan } from '#core/craft/crafts.ts';
 import type { MergedLine } from '#core/gathering/merge.ts';
 import { yarnTable } from '#core/gathering/yarn-table.ts';
 import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
@@ -9,6 +10,8 @@ import type { Units } from '#core/units/units.ts';
 import { useTried } from '#islands/series/trial-store.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
+
+type Made = MadeOf<Piece, Plan>;
 
 export interface ToGatherProps {
   /** Null while the piece is not described: then lists say only what their teacher wrote. */
