@@ -59,7 +59,7 @@ function entryFault({ name, isEncrypted, method, unixMode, byteCount, packedByte
   if (isEncrypted) return 'This file is locked with a password. Make the zip without one.';
   if (method !== 0 && method !== 8) return 'This file is packed in a way we do not read. Make the zip anew with your computer’s own tools.';
   if (kind === 'folder') return byteCount > 0 ? 'This is named like a folder and has bytes like a file.' : null;
-  if (byteCount > mostBytesOf(kind)) return `Unpacked this file would be ${sizeWords(byteCount)}. At most ${sizeWords(mostBytesOf(kind))} work.`;
+  if (byteCount > mostBytesOf(kind)) return `Unpacked this file would be ${fineSize(byteCount)}. At most ${fineSize(mostBytesOf(kind))} work.`;
   if (method === 0 && byteCount !== packedByteCount) return 'This file says two different lengths of itself.';
   const isBomb = byteCount > FOLDER_LIMITS.ratioFromBytes && byteCount > packedByteCount * FOLDER_LIMITS.maxRatio;
   return isBomb ? 'This file would grow more than a hundredfold when unpacked.' : null;
@@ -70,6 +70,11 @@ function nameFault(name: string): string | null {
   if (name.includes('\\') || name.startsWith('/') || /^[a-z]:/i.test(name) || name.split('/').includes('..')) return 'This name leads out of the folder.';
   if (/\.(?:zip|jar|gz|tgz|bz2|xz|7z|rar|tar)$/i.test(name)) return 'This is a packed file within the zip. Put in what it holds.';
   return null;
+}
+
+/** Texts are small: megabytes would not tell one from another. */
+function fineSize(bytes: number): string {
+  return bytes < 10e6 ? `${Math.ceil(bytes / 1_000).toLocaleString('en-GB')}\u00a0kB` : sizeWords(bytes);
 }
 
 /** Sorted by place, each has to begin where the one before it has ended. */

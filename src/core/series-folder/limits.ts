@@ -9,6 +9,8 @@ export const FOLDER_LIMITS = {
   maxBytes: 600 * MIB,
   /** A text, unpacked: lesson, piece, list or captions. */
   maxTextBytes: MIB,
+  /** The list, whose reader is the slowest: half a megabyte of the worst takes three seconds, and the longest series has a tenth of that. */
+  maxListBytes: MIB / 2,
   maxPictureBytes: 25_000_000,
   /** Unpacked to packed; words come to ten at the most. Counted for files large enough to do harm. */
   maxRatio: 100,
@@ -38,5 +40,6 @@ export function kindOfName(name: string): FolderFileKind | 'folder' | null {
 /** The most bytes a file of a kind may have, unpacked. */
 export function mostBytesOf(kind: FolderFileKind): number {
   if (kind === 'film') return FOLDER_LIMITS.maxBytes;
+  if (kind === 'list') return FOLDER_LIMITS.maxListBytes;
   return kind === 'picture' ? FOLDER_LIMITS.maxPictureBytes : FOLDER_LIMITS.maxTextBytes;
 }

@@ -1,5 +1,5 @@
 /**
- * Whether a YAML text may nest so deep that reading it takes all memory: a megabyte of opening brackets ends the process
+ * Whether a YAML text may nest so deep that reading it takes all memory: half a megabyte of opening brackets ends the process
  * of the parser we use. Judged by signs alone, whatever they stand in, so words that only look like nesting count too;
  * the list of a whole series has a few hundred brackets at most, and never so many marks in a row.
  */
