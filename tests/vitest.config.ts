@@ -36,7 +36,8 @@ export default defineConfig({
           // Two modules that only Astro's own build knows.
           alias: { 'astro:middleware': `${root}tests/support/astro-middleware.ts`, 'astro:actions': `${root}tests/support/astro-actions.ts` },
           include: ['tests/server/**/*.test.ts'],
-          exclude: [withoutDatabase],
+          // Minutes each: run by themselves, `npm run test:slow`.
+          exclude: [withoutDatabase, ...process.env['FELLMARK_TEST_SLOW'] === 'on' ? [] : ['tests/server/**/*.slow.test.ts']],
           globalSetup: ['tests/support/database-server.ts'],
           setupFiles: ['tests/support/server-setup.ts'],
           pool: 'forks', isolate: true,

@@ -94,7 +94,7 @@ describe('the end of a part', () => {
     const { series, parts: [first], student, seat } = await buildFollowed();
     const ctx = await contextFor(student);
     const finished = async () => (await LessonVisit.findOne({ where: { enrolmentId: seat.id, lessonId: first.id } }))?.finishedAt ?? null;
-    expect(await finishPart(ctx, { series: series.slug, lesson: first.publicId, done: true })).toEqual({ number: 1, next: 2 });
+    expect(await finishPart(ctx, { series: series.slug, lesson: first.publicId, done: true })).toEqual({ number: 1, next: 2, isLast: false });
     const before = await finished();
     ctx.clock.set(at('11:00:00'));
     await finishPart(ctx, { series: series.slug, lesson: first.publicId, done: true });

@@ -36,7 +36,7 @@ async function bigFilm(): Promise<string> {
   return path;
 }
 
-describe.runIf(process.env['FELLMARK_TEST_SLOW'] === 'on')('a film of a gigabyte', () => {
+describe('a film of a gigabyte', () => {
   test('arrives although it is cut three times, and is made ready without being held in memory', { timeout: 1_800_000 }, async () => {
     const path = await bigFilm();
     const workroom = await buildWorkroom();
