@@ -31,7 +31,7 @@ for (const javaScriptEnabled of [true, false]) {
       await page.getByRole('link', { name: 'See it so' }).click();
       await expect(page.getByText('It fits your loom')).toBeVisible();
       await page.getByRole('heading', { name: 'Everything to gather' }).scrollIntoViewIfNeeded();
-      await expect(page.getByText('For your 31 cm, with a margin.')).toBeVisible();
+      await expect(page.getByText(/^For your own piece, 31.cm wide/)).toBeVisible();
 
       await takeSeat(page);
       await expect(page).toHaveURL(/\/sign-in\?to=/);
@@ -78,7 +78,7 @@ test('what was typed about her loom comes with the seat', async ({ page, request
   await untilSeat(page, true);
   await expect(page.getByText('Every amount is reckoned for your loom.')).toBeVisible();
   await page.goto('/series/low-tide');
-  await expect(page.getByText('For your 31 cm, with a margin.')).toBeVisible();
+  await expect(page.getByText(/^For your own piece, 31.cm wide/)).toBeVisible();
 });
 
 test('who has not confirmed her address is told so, and sent to nobody', async ({ page, request }) => {

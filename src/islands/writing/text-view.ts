@@ -41,7 +41,8 @@ function extensionsOf({ label, says, sayable, onEdit, onCaretLine, onSave, onPic
   return [
     history(), drawSelection(), highlightSpecialChars(), closeBrackets(), highlightSelectionMatches(),
     EditorView.lineWrapping, lessonLanguage, textLook, numbers.of([]), search({ top: true }), suggestions(sayable),
-    EditorView.contentAttributes.of({ 'aria-label': label, 'aria-description': says, spellcheck: 'true', autocorrect: 'on', autocapitalize: 'sentences' }),
+    // The tab stop is said in so many words: what scrolls must hold something that takes the focus, and not every tool counts an editable field.
+    EditorView.contentAttributes.of({ tabindex: '0', 'aria-label': label, 'aria-description': says, spellcheck: 'true', autocorrect: 'on', autocapitalize: 'sentences' }),
     keymap.of([
       { key: 'Mod-s', preventDefault: true, run: () => { onSave(); return true; } },
       { key: 'F8', run: nextDiagnostic },
