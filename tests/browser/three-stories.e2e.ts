@@ -5,6 +5,7 @@
 import sharp from 'sharp';
 import { expect, test as base, type Browser, type Page } from 'playwright/test';
 import { stateOf } from './support/demo-people.ts';
+import { textField } from './support/lesson-text.ts';
 import { letterTo } from './support/mail-tray.ts';
 import { newPerson, signInHere, type NewPerson } from './support/new-person.ts';
 import { CARD, payWith, untilSeat } from './support/pay.ts';
@@ -53,8 +54,8 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
   await test.step('the teacher changes a part and publishes it', async () => {
     await teacher.goto('/workroom/series/low-tide');
     await teacher.getByRole('link', { name: 'Gather and plan' }).first().click();
-    const text = teacher.locator('#f-source');
-    await text.fill(`${await text.inputValue()}\n\nFor ${name}: begin in daylight.\n`);
+    await textField(teacher).press('ControlOrMeta+End');
+    await teacher.keyboard.insertText(`\n\nFor ${name}: begin in daylight.\n`);
     await teacher.getByRole('button', { name: /^Save/ }).first().click();
     await expect(teacher.getByText(/^Saved/).first()).toBeVisible();
     await teacher.goto('/workroom/series/low-tide');

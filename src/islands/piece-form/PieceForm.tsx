@@ -6,7 +6,6 @@ import { useCallback, useDeferredValue, useEffect, useMemo, useReducer, useRef, 
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { Act } from '#core/craft/piece-form/change-typed.ts';
-import { fieldsOfTyped, typedOfFields } from '#core/craft/piece-form/field-names.ts';
 import { judgeTyped, type Judgement } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
@@ -21,6 +20,7 @@ import { AllowanceFields, BeatFields, HangingFields, SizeAndLoom, WarpFields } f
 import { pieceFormAfter, pieceFormBegins, toldNow } from './piece-form-state.ts';
 import { PieceDrawing } from './PieceDrawing.tsx';
 import { PiecePlan } from './PiecePlan.tsx';
+import { typedBefore } from '#islands/ui/typed-before.ts';
 import { useUnsavedGuard } from './use-unsaved-guard.ts';
 
 export interface PieceFormProps {
@@ -82,7 +82,7 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
     heed: new Map(judged.ok ? judged.warnings.map(({ field, says }) => [field, says]) : []),
   }), [typed, told, judged, type, act, action]);
 
-  useFoundText(form, first, (found) => { tell({ kind: 'found', typed: found }); });
+  useEffect(() => { if (form.current !== null) for (const [field, text] of typedBefore(form.current)) type(field, text); }, [type]);
   useFocusOnFresh(form, state.fresh);
 
   const trySaving = (event: SyntheticEvent) => {
@@ -141,18 +141,6 @@ function useLastMade(judged: Judgement, typed: TypedPiece): Made | null {
   const made = { judged, piece, plan, typed };
   keep(made);
   return made;
-}
-
-/** What was typed before this script ran stands in the fields already. */
-function useFoundText(form: React.RefObject<HTMLFormElement | null>, first: TypedPiece, onFound: (typed: TypedPiece) => void): void {
-  useEffect(() => {
-    if (form.current === null) return;
-    const fields = new FormData(form.current);
-    const found = typedOfFields((name) => { const text = fields.get(name); return typeof text === 'string' ? text : undefined; });
-    const known = fieldsOfTyped(first);
-    const isNew = [...fieldsOfTyped(found)].some(([name, text]) => known.has(name) && known.get(name) !== text);
-    if (isNew) onFound(found);
-  }, []);
 }
 
 /** Hands go on in the row that was just put in. */

@@ -24,9 +24,7 @@ export type PieceFormEvent =
   | { readonly kind: 'act'; readonly act: Act }
   | { readonly kind: 'put-back' }
   | { readonly kind: 'enter' | 'leave'; readonly field: string }
-  | { readonly kind: 'try' }
-  /** What the browser had in the fields before the script ran. */
-  | { readonly kind: 'found'; readonly typed: TypedPiece };
+  | { readonly kind: 'try' };
 
 export function pieceFormBegins(typed: TypedPiece, isTried: boolean, isChanged: boolean): PieceFormState {
   return { typed, isChanged, isTried, before: null, inHand: null, fresh: null, news: '' };
@@ -85,8 +83,6 @@ export function pieceFormAfter(state: PieceFormState, event: PieceFormEvent): Pi
       return state.inHand === event.field ? { ...state, inHand: null } : state;
     case 'try':
       return { ...state, isTried: true, inHand: null };
-    case 'found':
-      return { ...state, typed: event.typed, isChanged: true };
   }
 }
 

@@ -2,7 +2,7 @@
  * A student's own making beside the pattern: loom, width, ends and yarns, reckoned and drawn as she types. Without script
  * it is a form; the answer is the same, because the same core gives it.
  */
-import { useDeferredValue, useEffect, useMemo, useReducer, useState } from 'react';
+import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState } from 'react';
 import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
 import type { KeptPiece } from '#core/craft/my-piece/judge-woven.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
@@ -10,7 +10,8 @@ import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { Button } from '#islands/ui/Button.tsx';
 import { LoomFields } from './LoomFields.tsx';
-import { mineAfter } from './mine-after.ts';
+import { typedBefore } from '#islands/ui/typed-before.ts';
+import { eventOfField, mineAfter } from './mine-after.ts';
 import { MineAnswer } from './MineAnswer.tsx';
 import { WayFields } from './WayFields.tsx';
 import { WovenFields } from './WovenFields.tsx';
@@ -36,7 +37,12 @@ export interface MyPieceProps {
 export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, revision, errors, action }: MyPieceProps) {
   const [typed, change] = useReducer(mineAfter, before);
   const [alive, setAlive] = useState(false);
-  useEffect(() => setAlive(true), []);
+  const form = useRef<HTMLFormElement>(null);
+  useEffect(() => {
+    setAlive(true);
+    const found = form.current === null ? [] : typedBefore(form.current);
+    for (const [name, text] of found.toSorted(([a], [b]) => Number(a === 'units') - Number(b === 'units'))) change(eventOfField(before, name, text));
+  }, []);
   const settled = useDeferredValue(typed);
   const judged = useMemo(() => judgeMine(settled, pattern, kept), [settled, pattern, kept]);
   const planned = useMemo(() => planPiece(pattern, settled.units), [pattern, settled.units]);
@@ -45,7 +51,7 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, rev
   const faults = alive ? now : errors;
   return (
     <div className="my-piece">
-      <form method="post" action={action} className="stack stack-wide" aria-label="My piece" noValidate>
+      <form ref={form} method="post" action={action} className="stack stack-wide" aria-label="My piece" noValidate>
         <input type="hidden" name="series" value={slug} />
         <input type="hidden" name="revision" value={revision} />
         <LoomFields {...{ typed, pattern, faults, change, alive }} />

@@ -1,5 +1,5 @@
 // What can be done to the typed form, apart from any screen.
-import { WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
+import { LEAVE_OUT, WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import type { WayId } from '#core/craft/fitting/ways-to-fit.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
@@ -11,6 +11,14 @@ export type MineEvent =
   | { readonly kind: 'type-yarn'; readonly role: string; readonly key: string; readonly text: string }
   | { readonly kind: 'units'; readonly units: Units }
   | { readonly kind: 'as-pattern'; readonly pattern: FrameLoomPiece };
+
+/** What stands in the field of that name now, as an event. Texts belong to the units that were shown: those come last. */
+export function eventOfField(typed: TypedMine, name: string, text: string): MineEvent {
+  if (name === 'units') return { kind: 'units', units: text === 'in' ? 'in' : 'cm' };
+  if (name.startsWith(LEAVE_OUT)) return { kind: 'leave-out', key: name, isOut: text !== '' };
+  const role = Object.keys(typed.yarns).find((one) => name.startsWith(`yarns.${one}.`));
+  return role === undefined ? { kind: 'type', key: name, text } : { kind: 'type-yarn', role, key: name.slice(`yarns.${role}.`.length), text };
+}
 
 export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
   switch (event.kind) {

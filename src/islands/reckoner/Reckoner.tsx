@@ -23,6 +23,7 @@ import { RodFields, RyaFields, SoumakFields } from '#islands/reckoner/StitchFiel
 import { Typed } from '#islands/reckoner/Typed.tsx';
 import { YarnFields } from '#islands/reckoner/YarnFields.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
+import { typedBefore } from '#islands/ui/typed-before.ts';
 
 const FIELDS: Readonly<Record<PartName, (props: { hand: FormHand }) => ReactNode>> = {
   yarn: YarnFields, sett: SettFields, cloth: ClothFields, soumak: SoumakFields, rya: RyaFields, shape: ShapeFields, rod: RodFields, piece: PieceFields,
@@ -41,21 +42,14 @@ function useAddress(form: ReckonerForm, initial: ReckonerForm): string {
   return address;
 }
 
-/** What was typed before the browser had read this script stands in the fields already. */
-function typedBefore(element: HTMLFormElement, form: ReckonerForm): readonly (readonly [ReckonerField, string])[] {
-  const data = new FormData(element);
-  return RECKONER_FIELDS.flatMap((field) => {
-    const value = data.get(field);
-    return typeof value === 'string' && value !== form[field] ? [[field, value] as const] : [];
-  });
-}
+const isField = (name: string): name is ReckonerField => RECKONER_FIELDS.some((field) => field === name);
 
 function useForm(initial: ReckonerForm, element: RefObject<HTMLFormElement | null>) {
   const [form, change] = useReducer((now: ReckonerForm, [field, value]: readonly [ReckonerField, string]) => changeField(now, field, value), initial);
   const [alive, setAlive] = useState(false);
   useEffect(() => {
     setAlive(true);
-    if (element.current !== null) for (const typed of typedBefore(element.current, initial)) change(typed);
+    if (element.current !== null) for (const [name, text] of typedBefore(element.current)) if (isField(name)) change([name, text]);
   }, []);
   return { form, change, alive };
 }

@@ -1,5 +1,6 @@
 import { readFileSync } from 'node:fs';
-import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { act, cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { hydrateRoot } from 'react-dom/client';
 import { renderToString } from 'react-dom/server';
 import { afterEach, describe, expect, test } from 'vitest';
 import { judgeTyped } from '#core/craft/piece-form/judge-typed.ts';
@@ -75,7 +76,27 @@ const ends = (): string => [...document.querySelectorAll('.plan-table tr')].find
 
 const retype = (name: string, text: string): void => { fireEvent.change(field(name), { target: { value: text } }); };
 
+/** As the server drew it, before its script wakes. */
+async function wake(meanwhile: (place: HTMLElement) => void): Promise<HTMLElement> {
+  const { container } = render(<div dangerouslySetInnerHTML={{ __html: renderToString(<PieceForm {...props} />) }} />);
+  const place = container.querySelector('div') ?? container;
+  meanwhile(place);
+  await act(async () => { hydrateRoot(place, <PieceForm {...props} />); });
+  return place;
+}
+
 describe('the form on the page', () => {
+  test('just drawn it is as it was saved, whatever its choices stand at', async () => {
+    await wake(() => undefined);
+    expect(screen.getByText('Saved today 14:02')).toBeTruthy();
+  });
+
+  test('takes up what was typed before its script woke', async () => {
+    await wake(() => { field('size.widthMm').value = '31,5'; });
+    expect(ends()).toBe('Warp ends64\u00a0ends');
+    expect(screen.getByText('Not saved yet')).toBeTruthy();
+  });
+
   test('numbers follow what is typed', () => {
     open();
     expect(ends()).toBe('Warp ends62\u00a0ends');

@@ -1,6 +1,7 @@
 // @vitest-environment jsdom
-import { cleanup, fireEvent, render, screen } from '@testing-library/react';
+import { act, cleanup, fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
+import { hydrateRoot } from 'react-dom/client';
 import { renderToString } from 'react-dom/server';
 import { afterEach, describe, expect, test } from 'vitest';
 import { typeMine } from '#core/craft/my-piece/typed-mine.ts';
@@ -21,6 +22,16 @@ describe('my piece', () => {
     type('Width of your piece', '30,5');
     expect(screen.getByText('pattern 82 ends')).toBeDefined();
     expect(screen.getByText(/The piece is .* wide instead of/)).toBeDefined();
+  });
+
+  test('takes up what was typed before its script woke, in the units that were shown', async () => {
+    const { container } = render(<div dangerouslySetInnerHTML={{ __html: renderToString(<MyPiece {...props} />) }} />);
+    const place = container.querySelector('div') ?? container;
+    const width = screen.getByRole<HTMLInputElement>('textbox', { name: 'Inside width' });
+    width.value = '50,8';
+    await act(async () => { hydrateRoot(place, <MyPiece {...props} />); });
+    type('Nail spacing', '8');
+    expect(width.value).toBe('50,8');
   });
 
   test('an impossible loom is told at its field and in the status, with what works', () => {
