@@ -59,7 +59,7 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
     await teacher.getByRole('button', { name: /^Save/ }).first().click();
     await expect(teacher.getByText(/^Saved/).first()).toBeVisible();
     await teacher.goto('/workroom/series/low-tide');
-    await teacher.getByRole('button', { name: 'Publish the changes' }).click();
+    await teacher.getByRole('button', { name: 'Publish the changes', exact: true }).click();
     await teacher.locator('#publish-dialog').getByRole('button', { name: /^Publish/ }).click();
     await expect(teacher.getByText('Students read everything as it stands here.')).toBeVisible();
   });
