@@ -61,8 +61,7 @@ describe('a series on its teacher’s table', () => {
     expect(await statementsOf(() => seriesDesk(actor, series.slug))).toBe(few);
     expect(await statementsOf(() => lessonDesk(actor, series.slug, one.publicId))).toBe(fewOfPart);
     expect(few).toBeLessThanOrEqual(9);
-    // Whether a part may go out is judged from its whole series.
-    expect(fewOfPart).toBeLessThanOrEqual(13);
+    expect(fewOfPart).toBeLessThanOrEqual(9);
   });
 
   test('is not there for anybody else: another teacher, a helper, a student', async () => {

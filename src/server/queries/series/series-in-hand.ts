@@ -1,9 +1,11 @@
 /** A series with everything that `whatIsMissing` looks at. */
 import { amountOf } from '#core/craft/amounts.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
+import type { Piece, Plan } from '#core/craft/crafts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { LessonText, RefusedText } from '#core/lesson-text/parse-lesson-text.ts';
 import type { LessonNode } from '#core/lesson-text/tree.ts';
+import type { Outcome } from '#core/outcome.ts';
 import type { PartInHand, SeriesInHand } from '#core/series/missing.ts';
 import { GatheringItem, Lesson, PatternPiece, type Series } from '#server/models/index.ts';
 import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
@@ -12,39 +14,48 @@ import { partOpenings } from '#server/queries/series/part-openings.ts';
 export interface Draft {
   readonly lesson: Lesson;
   readonly text: LessonText | RefusedText;
+  /** Its gathering list, in order. */
+  readonly list: readonly GatheringItem[];
 }
 
-export async function seriesInHand(series: Series): Promise<{ inHand: SeriesInHand; drafts: Draft[] }> {
-  const [lessons, piece, media] = await Promise.all([
+/** What was read for it comes along, so that a page asks for none of it twice. */
+export interface SeriesRead {
+  readonly inHand: SeriesInHand;
+  /** All parts that are in, in their order. */
+  readonly drafts: readonly Draft[];
+  /** The pattern piece; null while it is not described. */
+  readonly pattern: { readonly piece: Piece; readonly planned: Outcome<Plan> } | null;
+  readonly media: readonly SeriesMediaFile[];
+}
+
+export async function seriesInHand(series: Series): Promise<SeriesRead> {
+  const [lessons, described, media] = await Promise.all([
     Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
     mediaOnDesk(series.id),
   ]);
-  const items = lessons.length === 0 ? [] : await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) } });
-  const plan = piece === null ? null : planPiece(piece.data);
+  const items = lessons.length === 0 ? [] : await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) }, order: ['position', 'id'] });
+  const drafts = lessons.map((lesson): Draft => ({ lesson, text: lesson.draftReading, list: items.filter(({ lessonId }) => lessonId === lesson.id) }));
+  const pattern = described === null ? null : { piece: described.data, planned: planPiece(described.data) };
   // While no plan can be reckoned, that is what is missing, not each amount.
-  const isUnknown = (key: string): boolean => piece !== null && plan?.ok === true && !amountOf(key, piece.data, plan.value).ok;
+  const isUnknown = (key: string): boolean => pattern?.planned.ok === true && !amountOf(key, pattern.piece, pattern.planned.value).ok;
   const openings = partOpenings(lessons);
-  const parts = lessons.map((lesson, index): PartInHand => {
-    const listed = items.filter(({ lessonId }) => lessonId === lesson.id).sort((a, b) => a.position - b.position);
+  const parts = drafts.map(({ lesson, text, list }, index): PartInHand => {
     return {
       ...(openings[index] ?? { number: index + 1, opensAfterPart: null, hasCheckpoint: false, opensAt: null }),
       title: lesson.title,
       isPreview: lesson.isPreview,
       isEmpty: lesson.draftSource.trim() === '',
-      list: listed.map(({ kind, name, amountKey, amountText }) => ({ kind, name, amountText, hasAmount: amountKey !== null || amountText !== null })),
+      list: list.map(({ kind, name, amountKey, amountText }) => ({ kind, name, amountText, hasAmount: amountKey !== null || amountText !== null })),
       saysWhatToLookFor: lesson.checkpoint === null || lesson.checkpoint.look.length > 0,
-      unknownListAmounts: [...new Set(listed.flatMap(({ amountKey }) => (amountKey !== null && isUnknown(amountKey) ? [amountKey] : [])))],
-      ...factsOfText(lesson.draftReading, media, isUnknown),
+      unknownListAmounts: [...new Set(list.flatMap(({ amountKey }) => (amountKey !== null && isUnknown(amountKey) ? [amountKey] : [])))],
+      ...factsOfText(text, media, isUnknown),
     };
   });
   // Only a woven piece has a form to describe it in: without one, amounts are said in words.
-  const pieceFits = plan?.ok ?? (series.craft === 'frame-loom' ? null : true);
+  const pieceFits = pattern?.planned.ok ?? (series.craft === 'frame-loom' ? null : true);
   const { title, summary, story, techniques, priceMinor } = series;
-  return {
-    inHand: { title, summary, story, techniques, priceMinor, pieceFits, parts },
-    drafts: lessons.map((lesson) => ({ lesson, text: lesson.draftReading })),
-  };
+  return { inHand: { title, summary, story, techniques, priceMinor, pieceFits, parts }, drafts, pattern, media };
 }
 
 type TextFacts = Pick<PartInHand, 'textProblems' | 'textWarnings' | 'hasCaution' | 'stepCount' | 'unknownAmounts' | 'unknownMedia' | 'uncaptionedVideos'>;

@@ -9,9 +9,8 @@ import { partMayGoOut, type PartMayGoOut } from '#core/series/publishing-order.t
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { GatheringItem, Lesson, LessonVersion, PatternPiece, Series, Workroom } from '#server/models/index.ts';
+import { GatheringItem, Lesson, LessonVersion, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
-import { mediaOnDesk } from '#server/queries/media/media-of-series.ts';
 import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
 export interface PartOfSeries {
@@ -77,21 +76,19 @@ const SEATS = `
 export async function lessonDesk(actor: Actor, slug: string, publicId: string): Promise<LessonDesk | null> {
   const series = await Series.findOne({ where: { slug } });
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
-  const lesson = await Lesson.findOne({ where: { publicId, seriesId: series.id } });
+  const { inHand, drafts, pattern, media } = await seriesInHand(series);
+  const at = drafts.findIndex((draft) => draft.lesson.publicId === publicId);
+  const lesson = drafts[at]?.lesson ?? (await Lesson.findOne({ where: { publicId, seriesId: series.id } }));
   if (lesson === null) return null;
-  const [workroom, others, version, list, piece, media, seats, { inHand, drafts }] = await Promise.all([
+  const [workroom, version, list, seats] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
-    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['id', 'publicId', 'title', 'checkpoint', 'opens'] }),
     lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
-    GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }),
-    PatternPiece.findByPk(series.id),
-    mediaOnDesk(series.id),
+    drafts[at]?.list ?? GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }),
     sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
-    seriesInHand(series),
   ]);
-  const parts = others.map((part, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));
+  const parts = drafts.map(({ lesson: part }, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));
   const missing = whatIsMissing(inHand);
-  const number = parts.find((part) => part.publicId === publicId)?.number ?? null;
+  const number = at === -1 ? null : at + 1;
   const { title, minutes, isPreview, opens, checkpoint, draftSource, draftRevision, draftReading } = lesson;
   return {
     series: { id: series.id, slug, title: series.title, state: series.state, workroomName: workroom.name, timeZone: workroom.timeZone },
@@ -103,7 +100,7 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
     draft: { source: draftSource, revision: draftRevision, reading: draftReading },
     published: version === null ? null : { number: version.number, at: version.createdAt, source: version.source },
     list: list.map(({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note }) => ({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note })),
-    pattern: piece?.data ?? null,
+    pattern: pattern?.piece ?? null,
     media,
     seats,
   };

@@ -1,14 +1,13 @@
 /** A series as its teacher has it on her table: what she sells, its parts with the state of their texts, and what is missing. */
 import { QueryTypes } from 'sequelize';
 import type { Checkpoint } from '#contracts/lesson.ts';
-import { planPiece } from '#core/craft/plan.ts';
 import type { Piece } from '#core/craft/crafts.ts';
 import type { Plan } from '#core/craft/crafts.ts';
 import { whatIsMissing, type Missing } from '#core/series/missing.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { Enrolment, PatternPiece, Series, Workroom } from '#server/models/index.ts';
+import { Enrolment, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
@@ -82,14 +81,12 @@ const PARTS = `
 export async function seriesDesk(actor: Actor, slug: string): Promise<SeriesDesk | null> {
   const series = await Series.findOne({ where: { slug } });
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
-  const [workroom, rows, { inHand }, seatCount, piece] = await Promise.all([
+  const [workroom, rows, { inHand, pattern }, seatCount] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
     sequelize.query<PartRow>(PARTS, { replacements: [series.id], type: QueryTypes.SELECT }),
     seriesInHand(series),
     Enrolment.count({ where: { seriesId: series.id, state: 'active' } }),
-    PatternPiece.findByPk(series.id),
   ]);
-  const plan = piece === null ? null : planPiece(piece.data);
   const { title, craft, level, summary, story, techniques, priceMinor, currency, state, publishedAt, revision } = series;
   return {
     slug, title, craft, level, summary, story, techniques, priceMinor, currency, state, publishedAt, revision,
@@ -98,7 +95,7 @@ export async function seriesDesk(actor: Actor, slug: string): Promise<SeriesDesk
     parts: rows.filter(({ takenOutAt }) => takenOutAt === null).map(partOf),
     takenOut: rows.flatMap(({ publicId, title: name, position, takenOutAt }) => (takenOutAt === null ? [] : [{ publicId, title: name, number: position, takenOutAt }])),
     missing: whatIsMissing(inHand),
-    planned: piece !== null && plan?.ok === true ? { piece: piece.data, plan: plan.value } : null,
+    planned: pattern?.planned.ok === true ? { piece: pattern.piece, plan: pattern.planned.value } : null,
   };
 }
 
