@@ -70,7 +70,7 @@ export default tseslint.config(
   layer(['src/core/**'], [{ ...NO_NODE, regex: `${NO_NODE.regex}|^#contracts/|^zod|^astro` }, NO_EDGE, NO_BROWSER]),
   layer(['src/contracts/**'], [NO_NODE, NO_EDGE, NO_BROWSER]),
   layer(['src/server/**'], [NO_EDGE, NO_BROWSER, NO_SEQUELIZE, NO_LUCIA, { regex: '^#stand-ins/', message: 'Stand-ins are for demonstrations: real code may not lean on them.' }]),
-  layer(['src/server/{db,models,queries,use-cases,jobs,mail}/**', 'src/server/web/{rate-limit,readiness-checks}.ts'], [NO_EDGE, NO_BROWSER, NO_LUCIA]),
+  layer(['src/server/{db,models,queries,use-cases,jobs,mail,notices}/**', 'src/server/web/{rate-limit,readiness-checks}.ts'], [NO_EDGE, NO_BROWSER, NO_LUCIA]),
   layer(['src/server/auth/**'], [NO_EDGE, NO_BROWSER]),
   layer(['src/server/policies/**'], [NO_EDGE, NO_BROWSER, NO_SEQUELIZE, NO_LUCIA, { regex: '^#server/(?!policies/|context|errors)', message: 'A policy judges facts it is handed: load them in the use-case or query.', allowTypeImports: true }]),
   layer(['src/stand-ins/**'], [NO_EDGE, NO_SEQUELIZE, { regex: '^#server/', message: 'A stand-in plays somebody outside the house and knows nothing of its inside.' }]),

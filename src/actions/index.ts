@@ -2,10 +2,11 @@
 import { bench } from './bench.ts';
 import { checkout } from './checkout.ts';
 import { following } from './following.ts';
+import { notices } from './notices.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
 import { pieces } from './pieces.ts';
 import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, office, people, pieces, videos, workroom };
+export const server = { bench, checkout, following, notices, office, people, pieces, videos, workroom };

@@ -18,6 +18,8 @@ export interface Actor {
   readonly units: 'cm' | 'in';
   readonly timeZone: string;
   readonly scheme: 'system' | 'light' | 'dark';
+  /** Notices in her page that she has not marked as read. */
+  readonly unreadNotices: number;
   /** Hash of the session in use, so that "end all others" can spare it. */
   readonly sessionId: string;
   /** When the password was last typed in this session. */

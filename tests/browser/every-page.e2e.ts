@@ -22,6 +22,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/handbook': [['visitor', '/handbook']],
   '/handbook/[...slug]': [['visitor', '/handbook/tabby'], ['visitor', '/handbook/yarn-counts']],
   '/loom': [['maud', '/loom'], ['amara', '/loom']],
+  '/notices': [['maud', '/notices'], ['amara', '/notices']],
   '/office': [['pell', '/office']],
   '/office/jobs': [['pell', '/office/jobs']],
   '/office/log': [['pell', '/office/log']],

@@ -59,6 +59,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
     { at: ({ photo }) => `/media/${photo}/original`, answers: '404' },
     { at: `/media/${'0'.repeat(26)}/large`, answers: '404' },
   ],
+  '/notices': [{ at: '/notices', answers: SIGNED_IN }],
   '/new-password/[token]': [{ at: '/new-password/nothing', answers: '410' }],
   '/office': [{ at: '/office', answers: STEWARD }],
   '/office/jobs': [{ at: '/office/jobs', answers: STEWARD }],

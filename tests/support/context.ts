@@ -35,6 +35,7 @@ export async function actorOf(user: User): Promise<Actor> {
     units: user.units,
     timeZone: user.timeZone,
     scheme: user.scheme,
+    unreadNotices: 0,
     sessionId: '0'.repeat(64),
     provedAt: new Date('2026-12-01T09:59:00Z'),
   };

@@ -6,7 +6,7 @@ import type { SitePerson } from '#components/site/person.ts';
 export type Area = 'public' | 'workroom' | 'office';
 
 export type Place =
-  | 'loom' | 'gather' | 'series' | 'reckoner' | 'handbook' | 'account'
+  | 'loom' | 'gather' | 'series' | 'reckoner' | 'handbook' | 'notices' | 'account'
   | 'workroom' | 'bench' | 'workroom-series' | 'students' | 'money'
   | 'office' | 'sign-in';
 
@@ -21,7 +21,7 @@ export interface NavLink {
 
 export interface NavigationFacts {
   area: Area;
-  person: Pick<SitePerson, 'roles'> | null;
+  person: Pick<SitePerson, 'roles' | 'unread'> | null;
   /** The series a student is in, where the page belongs to one. */
   series?: { slug: string; toGather?: number };
   /** Photos waiting on the bench. */
@@ -36,6 +36,7 @@ const handbook = link('handbook', '/handbook', 'Handbook', 'book');
 const loom = link('loom', '/loom', 'My loom', 'loom');
 const workroom = link('workroom', '/workroom', 'Workroom', 'today');
 const office = link('office', '/office', 'Office', 'office');
+const notices = link('notices', '/notices', 'Notices', 'post');
 const account = link('account', '/account', 'Account', 'person');
 const breastLength = 5;
 
@@ -57,7 +58,7 @@ function outside({ person, series: current, waiting }: NavigationFacts): NavLink
   if (roles.includes('teacher') || roles.includes('helper')) desk.push(workroom, bench(waiting));
   if (person === null) return [series, reckoner, handbook];
   const gather = current === undefined ? [] : [counted(link('gather', `/series/${current.slug}/gather`, 'Gather', 'gather'), current.toGather, 'to gather')];
-  const own = desk.length > 0 && current === undefined ? [] : [loom];
+  const own = desk.length > 0 && current === undefined ? [] : [counted(loom, person.unread, 'unread')];
   return [...desk, ...own, ...gather, series, ...(gather.length > 0 && desk.length > 0 ? [] : [reckoner]), handbook];
 }
 
@@ -79,7 +80,7 @@ export function breastNavigation(facts: NavigationFacts): NavLink[] {
 /** What the menu under a person's name holds, beside signing out. */
 export function accountNavigation({ area, person }: NavigationFacts): NavLink[] {
   const roles = person?.roles ?? [];
-  const places: NavLink[] = [loom];
+  const places: NavLink[] = [loom, counted(notices, person?.unread, 'unread')];
   if (roles.includes('teacher') || roles.includes('helper')) places.push(workroom);
   if (roles.includes('steward')) places.push(office);
   if (area !== 'public') places.push(series);

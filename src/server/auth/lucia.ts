@@ -27,6 +27,7 @@ export interface UserAttributes {
   readonly units: 'cm' | 'in';
   readonly timeZone: string;
   readonly scheme: 'system' | 'light' | 'dark';
+  readonly unreadNotices: number;
 }
 
 declare module 'lucia' {
@@ -41,7 +42,7 @@ declare module 'lucia' {
 interface SessionAndUserRow {
   id: string; userId: number; expiresAt: Date; endsAt: Date; idleSeconds: number; provedAt: Date; device: string;
   publicId: string; name: string; email: string; confirmedAt: Date | null; isSteward: number; units: 'cm' | 'in'; timeZone: string;
-  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; workroomName: string | null; helps: string | null;
+  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; workroomName: string | null; helps: string | null; unreadNotices: number;
 }
 
 /** One statement a request: session, person and the roles that follow from other rows. A suspended person has no session. */
@@ -50,7 +51,8 @@ const SESSION_AND_USER = `
          u.public_id AS publicId, u.name, u.email, u.email_confirmed_at AS confirmedAt, u.is_steward AS isSteward, u.units, u.time_zone AS timeZone, u.scheme,
          w.id AS workroomId,
          COALESCE(w.name, (SELECT MIN(o.name) FROM workroom_helpers h JOIN workrooms o ON o.id = h.workroom_id WHERE h.user_id = u.id HAVING COUNT(*) = 1)) AS workroomName,
-         (SELECT GROUP_CONCAT(h.workroom_id) FROM workroom_helpers h WHERE h.user_id = u.id) AS helps
+         (SELECT GROUP_CONCAT(h.workroom_id) FROM workroom_helpers h WHERE h.user_id = u.id) AS helps,
+         (SELECT COUNT(*) FROM notice_receipts r WHERE r.user_id = u.id AND r.read_at IS NULL) AS unreadNotices
     FROM sessions s
     JOIN users u ON u.id = s.user_id AND u.suspended_at IS NULL
     LEFT JOIN workrooms w ON w.owner_id = u.id
@@ -76,6 +78,7 @@ function userOf(row: SessionAndUserRow): DatabaseUser {
       units: row.units,
       timeZone: row.timeZone,
       scheme: row.scheme,
+      unreadNotices: row.unreadNotices,
     },
   };
 }

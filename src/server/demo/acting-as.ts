@@ -26,6 +26,7 @@ export async function actingAs(user: User): Promise<Context & { actor: Actor }> 
       units: user.units,
       timeZone: user.timeZone,
       scheme: user.scheme,
+      unreadNotices: 0,
       sessionId: '',
       provedAt: now,
     },

@@ -1,9 +1,10 @@
 /** Writes a letter into the outbox; part of the caller's transaction. The worker sends it. */
 import { UniqueConstraintError } from 'sequelize';
+import type { LetterKind } from '#core/notices/letter-kinds.ts';
 import { Mail } from '#server/models/index.ts';
 import type { TemplateData, TemplateName } from '#server/mail/templates/index.ts';
 
-export interface Letter<T extends TemplateName> {
+export interface LetterTo<T extends TemplateName> {
   readonly template: T;
   readonly data: TemplateData<T>;
   readonly to: { readonly userId: number | null; readonly name: string; readonly address: string };
@@ -11,10 +12,12 @@ export interface Letter<T extends TemplateName> {
   readonly dedupeKey: string;
   /** After this the letter is worthless and is not sent. */
   readonly expiresAt?: Date;
+  /** Only for letters she asked for: asked again when it is sent, so that leaving stops what waits. */
+  readonly list?: { readonly workroomId: number; readonly kind: LetterKind };
 }
 
 /** @returns false when a letter with the same key was there already. */
-export async function postLetter<T extends TemplateName>(letter: Letter<T>): Promise<boolean> {
+export async function postLetter<T extends TemplateName>(letter: LetterTo<T>): Promise<boolean> {
   try {
     await Mail.create({
       dedupeKey: letter.dedupeKey,
@@ -24,6 +27,8 @@ export async function postLetter<T extends TemplateName>(letter: Letter<T>): Pro
       toName: letter.to.name,
       data: letter.data,
       expiresAt: letter.expiresAt ?? null,
+      listWorkroomId: letter.list?.workroomId ?? null,
+      listKind: letter.list?.kind ?? null,
       runAt: new Date(),
     });
     return true;

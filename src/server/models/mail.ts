@@ -1,4 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
+import { LETTER_KINDS, type LetterKind } from '#core/notices/letter-kinds.ts';
 import { count, id, json, maybeMoment, maybeRef, maybeText, moment, oneOf, text } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
@@ -13,7 +14,11 @@ export class Mail extends Model<InferAttributes<Mail>, InferCreationAttributes<M
   declare data: Record<string, unknown>;
   declare expiresAt: CreationOptional<Date | null>;
   declare sentAt: CreationOptional<Date | null>;
-  declare state: CreationOptional<'ready' | 'done' | 'dead'>;
+  /** The list it goes to, which she can leave until the moment it is sent; null for letters about her own doings. */
+  declare listWorkroomId: CreationOptional<number | null>;
+  declare listKind: CreationOptional<LetterKind | null>;
+  /** `dropped`: not sent, because she wants no such letters, or her address takes none. */
+  declare state: CreationOptional<'ready' | 'done' | 'dead' | 'dropped'>;
   declare runAt: Date;
   declare attempts: CreationOptional<number>;
   declare leaseOwner: CreationOptional<string | null>;
@@ -33,7 +38,9 @@ Mail.init({
   data: json(),
   expiresAt: maybeMoment(),
   sentAt: maybeMoment(),
-  state: oneOf(['ready', 'done', 'dead'], 'ready'),
+  listWorkroomId: maybeRef(),
+  listKind: { ...oneOf(LETTER_KINDS), allowNull: true, defaultValue: null },
+  state: oneOf(['ready', 'done', 'dead', 'dropped'], 'ready'),
   runAt: moment(),
   attempts: count(),
   leaseOwner: maybeText(64),

@@ -13,6 +13,8 @@ export class Workroom extends Model<InferAttributes<Workroom>, InferCreationAttr
   declare timeZone: string;
   declare currency: CreationOptional<string>;
   declare answerDays: CreationOptional<number>;
+  /** Stands at the foot of letters to many; empty until she writes one. */
+  declare postalAddress: CreationOptional<string>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -27,6 +29,7 @@ Workroom.init({
   timeZone: text(64),
   currency: { ...text(3), defaultValue: 'EUR' },
   answerDays: count(2),
+  postalAddress: { ...text(300), defaultValue: '' },
   createdAt: moment(),
   updatedAt: moment(),
 }, { sequelize, tableName: 'workrooms' });

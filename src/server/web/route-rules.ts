@@ -48,6 +48,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/series/[slug]/gather': 'public',
   '/series/[slug]/piece': 'signed-in',
   '/loom': 'signed-in',
+  '/notices': 'signed-in',
   '/reckoner': 'public',
   '/sign-in': 'public',
   '/sign-up': 'public',

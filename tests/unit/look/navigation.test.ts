@@ -9,7 +9,7 @@ const helper: NavigationFacts = { area: 'workroom', person: { roles: ['helper'] 
 const steward: NavigationFacts = { area: 'public', person: { roles: ['steward'] } };
 
 /** Every page of the house that may be led to. */
-const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/workroom', '/workroom/bench', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
+const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/notices', '/workroom', '/workroom/bench', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
 
 describe('the places in the top beam', () => {
   it('shows a visitor what is open to everybody', () => {
@@ -18,6 +18,11 @@ describe('the places in the top beam', () => {
 
   it('begins with her loom for a student', () => {
     expect(labels(student)).toEqual(['My loom', 'Series', 'Reckoner', 'Handbook']);
+  });
+
+  it('shows at a student’s loom how much she was told and has not read', () => {
+    expect(mainNavigation({ area: 'public', person: { roles: ['student'], unread: 2 } })[0]).toMatchObject({ place: 'loom', count: { of: 2, word: 'unread' } });
+    expect(mainNavigation({ area: 'public', person: { roles: ['student'], unread: 0 } })[0]?.count).toBeUndefined();
   });
 
   it('leads a student inside a series to what it needs, with the number of things not ticked yet', () => {

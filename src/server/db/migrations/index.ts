@@ -12,6 +12,7 @@ import { addWovenSoFar } from './0009-add-woven-so-far.ts';
 import { createOpenings } from './0010-create-openings.ts';
 import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 import { createCalendars } from './0012-create-calendars.ts';
+import { createNotices } from './0016-create-notices.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -26,4 +27,5 @@ export const migrations: readonly Migration[] = [
   createOpenings,
   createEarlierDrafts,
   createCalendars,
+  createNotices,
 ];

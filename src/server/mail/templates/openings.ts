@@ -23,7 +23,7 @@ export const partsOpened = defineTemplate({
         { kind: 'words', words: `${which} ${one ? 'is' : 'are'} open to you now. What is open stays open: take the time you need.` },
         { kind: 'list', items: parts.map(({ number, title }) => `Part ${number}, ${title}`) },
         { kind: 'act', label: `Go to Part ${first?.number ?? 1}`, href: `${publicUrl}/series/${seriesSlug}/${first?.number ?? 1}` },
-        { kind: 'words', words: `You have this letter because you have a seat in ${name} with ${workroomName}. Each part is told of once.` },
+        { kind: 'foot', words: `You have this letter because you have a seat in ${name} with ${workroomName}. Each part is told of once.` },
       ],
     };
   },

@@ -4,8 +4,9 @@ import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize, found } from '#server/errors.ts';
-import { postLetter } from '#server/mail/outbox.ts';
+import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
 import { Enrolment, Lesson, PartOpening, PhotoNote, ProgressPhoto, Series, User } from '#server/models/index.ts';
+import { putUpLetter } from '#server/notices/put-up.ts';
 import { maySitAtBench } from '#server/policies/workroom.ts';
 
 /**
@@ -42,7 +43,7 @@ async function tellStudent(told: { photo: ProgressPhoto; enrolment: Enrolment; s
   const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null, publishedVersionId: { [Op.ne]: null } }, order: ['position', 'id'] });
   const partNumber = lessons.findIndex(({ id }) => id === photo.lessonId) + 1;
   const opened = input.verdict === 'weave-on' ? await openedBy(photo, lessons) : [];
-  await postLetter({
+  const letter: LetterTo<'verdict'> = {
     template: 'verdict',
     dedupeKey: `verdict:${photo.publicId}`,
     to: { userId: student.id, name: student.name, address: student.email },
@@ -56,7 +57,9 @@ async function tellStudent(told: { photo: ProgressPhoto; enrolment: Enrolment; s
       notes: input.notes.map(({ words }) => words),
       openedParts: opened.map((lesson) => lessons.indexOf(lesson) + 1),
     },
-  });
+  };
+  await postLetter(letter);
+  await putUpLetter(letter, { kind: 'verdict', seriesId: series.id });
 }
 
 /** The parts that waited for this verdict. They are put on record as told, so that no second letter says they are open. */

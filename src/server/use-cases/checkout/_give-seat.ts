@@ -5,8 +5,9 @@ import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { found } from '#server/errors.ts';
-import { postLetter } from '#server/mail/outbox.ts';
+import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
 import { Enrolment, LedgerEntry, MyPieceRow, User, type Order, type Series } from '#server/models/index.ts';
+import { putUpLetter } from '#server/notices/put-up.ts';
 
 /** What the house keeps of a sale. */
 const FEE: BasisPoints = 800;
@@ -53,7 +54,7 @@ async function nextReceiptNumber(): Promise<number> {
 
 async function sendReceipt(series: Series, order: Order, receiptNumber: number, paidAt: Date): Promise<void> {
   const buyer = found(await User.findByPk(order.userId));
-  await postLetter({
+  const letter: LetterTo<'seat-bought'> = {
     template: 'seat-bought',
     dedupeKey: `receipt:${order.publicId}`,
     to: { userId: buyer.id, name: buyer.name, address: buyer.email },
@@ -67,5 +68,7 @@ async function sendReceipt(series: Series, order: Order, receiptNumber: number, 
       timeZone: buyer.timeZone,
       withdrawalGivenUp: order.terms.startAtOnce && order.terms.withdrawalGivenUp,
     },
-  });
+  };
+  await postLetter(letter);
+  await putUpLetter(letter, { kind: 'seat', seriesId: series.id });
 }

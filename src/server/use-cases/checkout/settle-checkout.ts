@@ -4,8 +4,9 @@ import { config } from '#server/config.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, found } from '#server/errors.ts';
-import { postLetter } from '#server/mail/outbox.ts';
+import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
 import { Order, Series, User } from '#server/models/index.ts';
+import { putUpLetter } from '#server/notices/put-up.ts';
 import type { Checkout } from '#server/payments/payment-service.ts';
 import { giveSeat } from './_give-seat.ts';
 
@@ -73,10 +74,12 @@ async function notePaidTwice(ctx: Context, order: Order, { id, paymentId }: Chec
 
 async function sayRefused(series: Series, order: Order): Promise<void> {
   const buyer = found(await User.findByPk(order.userId));
-  await postLetter({
+  const letter: LetterTo<'seat-refused'> = {
     template: 'seat-refused',
     dedupeKey: `refused:${order.publicId}`,
     to: { userId: buyer.id, name: buyer.name, address: buyer.email },
     data: { seriesTitle: series.title, seriesSlug: series.slug },
-  });
+  };
+  await postLetter(letter);
+  await putUpLetter(letter, { kind: 'seat', seriesId: series.id });
 }

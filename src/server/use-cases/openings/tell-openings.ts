@@ -1,8 +1,9 @@
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { found } from '#server/errors.ts';
-import { postLetter } from '#server/mail/outbox.ts';
+import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
 import { Enrolment, PartOpening, Series, User, Workroom } from '#server/models/index.ts';
+import { putUpLetter } from '#server/notices/put-up.ts';
 import { activeSeatsAfter, unmarkedOpenings, type OpenPart } from '#server/queries/openings/unmarked-openings.ts';
 
 const SEATS_AT_ONCE = 200;
@@ -33,14 +34,14 @@ async function tellOne(ctx: Context, enrolmentId: number): Promise<void> {
   });
 }
 
-/** One letter for all that opened together. */
+/** One letter for all that opened together, and the same in her page. */
 async function writeLetter(seat: Enrolment, parts: readonly OpenPart[]): Promise<void> {
   const [first] = parts;
   const student = found(await User.findByPk(seat.userId));
   if (first === undefined || student.suspendedAt !== null) return;
   const series = found(await Series.findByPk(seat.seriesId));
   const workroom = found(await Workroom.findByPk(series.workroomId));
-  await postLetter({
+  const letter: LetterTo<'parts-opened'> = {
     template: 'parts-opened',
     dedupeKey: `opened:${seat.publicId}:${first.publicId}`,
     to: { userId: student.id, name: student.name, address: student.email },
@@ -50,5 +51,7 @@ async function writeLetter(seat: Enrolment, parts: readonly OpenPart[]): Promise
       workroomName: workroom.name,
       parts: parts.map(({ number, title }) => ({ number, title })),
     },
-  });
+  };
+  await postLetter(letter);
+  await putUpLetter(letter, { kind: 'opening', seriesId: series.id });
 }

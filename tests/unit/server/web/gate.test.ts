@@ -6,7 +6,7 @@ import type { RouteRule } from '#server/web/route-rules.ts';
 
 const student: Actor = {
   userId: 1, publicId: 'p', name: 'Maud', email: 'maud@weavers.example', addressConfirmed: true, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [],
-  units: 'cm', timeZone: 'UTC', scheme: 'system', sessionId: 's', provedAt: new Date(0),
+  units: 'cm', timeZone: 'UTC', scheme: 'system', unreadNotices: 0, sessionId: 's', provedAt: new Date(0),
 };
 const PEOPLE = {
   visitor: null,

@@ -1,0 +1,19 @@
+/** Forms about notices: reading them, and in the workroom writing them. */
+import { MarkReadForm } from '#contracts/notices.ts';
+import { markRead } from '#server/use-cases/notices/mark-read.ts';
+import { safeReturn } from '#server/web/gate.ts';
+import { formAction } from './form-action.ts';
+
+export const notices = {
+  /** She stays where she is. */
+  markRead: formAction(MarkReadForm, async (input, ctx, api) => {
+    const count = await markRead(ctx, input);
+    return { to: safeReturn(`${api.url.pathname}${pageAsked(api.url)}`, '/notices'), ...(input.notice === 'all' && { said: count === 0 ? 'All were read already.' : 'All are marked as read.' }) };
+  }),
+};
+
+/** The page of a long list she was at. */
+function pageAsked(url: URL): string {
+  const page = url.searchParams.get('page') ?? '';
+  return /^\d{1,6}$/.test(page) ? `?page=${page}` : '';
+}
