@@ -96,6 +96,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/teachers/[handle]': [{ at: '/teachers/saltmarsh', answers: EVERYBODY }, { at: '/teachers/nobody', answers: '404' }],
   '/api/workroom/captions': [{ at: '/api/workroom/captions', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/lesson-draft': [{ at: '/api/workroom/lesson-draft', post: true, answers: '401 403 403 422 422 403 403' }],
+  '/api/workroom/piece-draft': [{ at: '/api/workroom/piece-draft', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/pictures': [{ at: '/api/workroom/pictures', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/videos/[video]': [{ at: ({ gatedVideo }) => `/api/workroom/videos/${gatedVideo}`, answers: '401 403 403 404 200 403 403' }],
   '/api/workroom/series-folder/[slug]': [{ at: '/api/workroom/series-folder/low-tide', answers: '401 403 403 404 200 403 403' }],

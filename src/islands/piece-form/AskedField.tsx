@@ -5,7 +5,7 @@ import { Choose } from '#islands/ui/Choose.tsx';
 import { Field, Select } from '#islands/ui/Field.tsx';
 import { fieldId } from '#islands/ui/field-id.ts';
 import { Glyph } from '#islands/ui/Glyph.tsx';
-import { useHands } from './hands.ts';
+import { useHands, useShown } from './hands.ts';
 import { yarnChoices } from './yarn-choices.ts';
 
 interface AskedFieldProps {
@@ -20,7 +20,8 @@ interface AskedFieldProps {
 
 /** One field of the form, as its `Asked` says: label, box, unit, what counts where it stays empty, and what was found. */
 export function AskedField({ asked, texts, prefix = '', bar = false, className }: AskedFieldProps) {
-  const { typed, wrong, heed, type } = useHands();
+  const { type } = useHands();
+  const { yarns, wrong, heed } = useShown();
   const name = `${prefix}${asked.key}`;
   const text = textOf(texts, asked.key);
   const words = { name, label: asked.label, hint: asked.hint, error: wrong.get(name) };
@@ -31,7 +32,7 @@ export function AskedField({ asked, texts, prefix = '', bar = false, className }
       ) : asked.kind === 'choice' ? (
         <Select {...words} value={text === '' ? asked.options[0].text : text} options={asked.options.map((option) => ({ value: option.text, label: option.label }))} onChange={(event) => type(name, event.currentTarget.value)} />
       ) : asked.kind === 'role' ? (
-        <Select {...words} value={text} options={yarnChoices(typed, text)} onChange={(event) => type(name, event.currentTarget.value)} />
+        <Select {...words} value={text} options={yarnChoices(yarns, text)} onChange={(event) => type(name, event.currentTarget.value)} />
       ) : (
         <TextOf {...{ asked, name, text, words }} />
       )}
@@ -51,14 +52,15 @@ interface TextOfProps {
 const LONGEST_POINTS = 6000;
 
 function TextOf({ asked, name, text, words }: TextOfProps) {
-  const { typed, type } = useHands();
+  const { type } = useHands();
+  const { units, texts } = useShown();
   const isWords = asked.kind === 'text';
-  const standard = asked.standard === undefined ? asked.otherwise : fieldText(asked.standard(typed), asked, typed.units);
+  const standard = asked.standard === undefined ? asked.otherwise : fieldText(asked.standard(texts), asked, units);
   return (
     <Field
       {...words}
       value={text}
-      unit={fieldUnit(asked, typed.units)}
+      unit={fieldUnit(asked, units)}
       placeholder={standard}
       maxLength={isWords ? asked.maxLength : asked.kind === 'points' ? LONGEST_POINTS : 60}
       inputMode={isWords || asked.kind === 'points' ? undefined : 'decimal'}

@@ -6,7 +6,7 @@ import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Wrong } from '#islands/ui/Wrong.tsx';
 import { ActButton, LookButton } from './ActButton.tsx';
 import { AskedField } from './AskedField.tsx';
-import { useHands } from './hands.ts';
+import { useHands, useShown } from './hands.ts';
 import { HiddenTexts } from './HiddenTexts.tsx';
 import { HiddenShapes, ShapeRows } from './ShapeRows.tsx';
 
@@ -43,7 +43,8 @@ export function BandFields({ band, index, count, laterIsUp }: BandFieldsProps) {
 }
 
 function FillTick({ prefix, fills }: { readonly prefix: string; readonly fills: boolean }) {
-  const { type, wrong } = useHands();
+  const { type } = useHands();
+  const { wrong } = useShown();
   const name = `${prefix}${FILL_KEY}`;
   // While it fills, its height has no box of its own: what is wrong with it is told here, and found under that id.
   const says = fills ? wrong.get(`${prefix}heightMm`) : undefined;

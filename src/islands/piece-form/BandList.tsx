@@ -1,33 +1,37 @@
 import { useState } from 'react';
-import { textOf } from '#core/craft/piece-form/typed-piece.ts';
+import { textOf, type TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Wrong } from '#islands/ui/Wrong.tsx';
 import { ActButton } from './ActButton.tsx';
 import type { BandWords } from './band-words.ts';
 import { BandRow } from './BandRow.tsx';
-import { useHands } from './hands.ts';
+import { useShown } from './hands.ts';
+import { useSameEntries } from './keep-same.ts';
 import { YarnRow } from './YarnRow.tsx';
 
 /** The yarns of the weft, each with what it does in the piece. */
-export function YarnList({ fresh }: { readonly fresh: string | null }) {
-  const { typed, wrong } = useHands();
-  const used = new Set(typed.bands.flatMap(({ texts, shapes }) => [texts['yarn'], texts['tabbyYarn'], ...shapes.map((shape) => shape.texts['yarn'])]));
+export function YarnList({ bands, fresh }: { readonly bands: TypedPiece['bands']; readonly fresh: string | null }) {
+  const { yarns, wrong } = useShown();
+  const used = new Set(bands.flatMap(({ texts, shapes }) => [texts['yarn'], texts['tabbyYarn'], ...shapes.map((shape) => shape.texts['yarn'])]));
   return (
     <section aria-labelledby="yarns-title" id="yarns">
       <h2 className="h3" id="yarns-title">Yarns</h2>
       <p className="small quiet">A role says what a yarn does in the piece: ground, accent, fringe.</p>
       <div className="lined-rows">
-        {typed.yarns.map(({ id, texts }, index) => (
-          <YarnRow key={id} texts={texts} prefix={`yarns.${String(index)}.`} row={{ index, id, isUsed: used.has(String(id)) }} isOpen={textOf(texts, 'grist') === '' || fresh === `yarns.${String(index)}.role`} />
+        {yarns.map(({ id, texts }, index) => (
+          <YarnRow key={id} texts={texts} prefix={`yarns.${String(index)}.`} index={index} id={id} isUsed={used.has(String(id))} isOpen={textOf(texts, 'grist') === '' || fresh === `yarns.${String(index)}.role`} />
         ))}
       </div>
       {wrong.has('yarns') && <Wrong id="f-yarns" says={wrong.get('yarns') ?? ''} />}
-      <p className="mt-3"><ActButton act={{ do: 'add-yarn' }} to={`yarn-${String(typed.yarns.length)}`} className="btn btn-sm"><Glyph name="plus" />Add a yarn</ActButton></p>
+      <p className="mt-3"><ActButton act={{ do: 'add-yarn' }} to={`yarn-${String(yarns.length)}`} className="btn btn-sm"><Glyph name="plus" />Add a yarn</ActButton></p>
     </section>
   );
 }
 
 interface BandListProps {
+  readonly bands: TypedPiece['bands'];
+  /** Whether what is woven later stands further up, as it does in the picture. */
+  readonly laterIsUp: boolean;
   /** By id of the band, as it was when the piece could be woven last. */
   readonly words: ReadonlyMap<number, BandWords>;
   readonly chosen: number | null;
@@ -38,14 +42,15 @@ interface BandListProps {
 }
 
 /** The bands, running as the picture beside them does: what was woven first lies where the picture has it. */
-export function BandList({ words, chosen, onChoose, open, fresh }: BandListProps) {
-  const { typed, wrong } = useHands();
-  const laterIsUp = textOf(typed.texts, 'hangs') !== 'turned';
-  const count = typed.bands.length;
-  const rows = typed.bands.map((band, index) => (
+export function BandList({ bands, laterIsUp, words, chosen, onChoose, open, fresh }: BandListProps) {
+  const { wrong, heed } = useShown();
+  const count = bands.length;
+  const wrongOf = useSameEntries(byBand(wrong));
+  const heedOf = useSameEntries(byBand(heed));
+  const rows = bands.map((band, index) => (
     <BandRow
       key={band.id} band={band} index={index} count={count} laterIsUp={laterIsUp} words={words.get(band.id) ?? null}
-      isChosen={chosen === band.id} isOpen={open === index || count === 1 || fresh === `bands.${String(index)}.technique`} onChoose={onChoose}
+      wrong={wrongOf.get(index) ?? NONE} heed={heedOf.get(index) ?? NONE} isChosen={chosen === band.id} isOpen={open === index || count === 1 || fresh === `bands.${String(index)}.technique`} onChoose={onChoose}
     />
   ));
   const add = <p className="band-add"><ActButton act={{ do: 'add-band', after: count - 1 }} to={`band-${String(count)}`} className="btn"><Glyph name="plus" />{count === 0 ? 'Add a band' : 'Add a band, woven last'}</ActButton></p>;
@@ -58,6 +63,19 @@ export function BandList({ words, chosen, onChoose, open, fresh }: BandListProps
       {!laterIsUp && add}
     </section>
   );
+}
+
+const NONE: ReadonlyMap<string, string> = new Map();
+
+/** Sentences by the place of the band whose fields they stand at. */
+function byBand(sentences: ReadonlyMap<string, string>): ReadonlyMap<number, ReadonlyMap<string, string>> {
+  const rows = new Map<number, Map<string, string>>();
+  for (const [field, says] of sentences) {
+    const [group, index] = field.split('.');
+    if (group !== 'bands' || index === undefined) continue;
+    rows.set(Number(index), (rows.get(Number(index)) ?? new Map<string, string>()).set(field, says));
+  }
+  return rows;
 }
 
 /** Which band is in hand: at first the one the page opens. */

@@ -1,4 +1,4 @@
-import { useState } from 'react';
+import { memo, useMemo, useState } from 'react';
 import { isTechnique } from '#core/craft/piece-form/asked-of-band.ts';
 import { TECHNIQUES } from '#core/craft/techniques/registry.ts';
 import { textOf, type TypedBand } from '#core/craft/piece-form/typed-piece.ts';
@@ -6,7 +6,7 @@ import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { BandFields } from './BandFields.tsx';
 import type { BandWords } from './band-words.ts';
-import { useHands } from './hands.ts';
+import { ShownContext, useShown, type Shown } from './hands.ts';
 import { Patch } from './Patch.tsx';
 import { yarnOf, yarnWords } from './yarn-choices.ts';
 
@@ -20,16 +20,21 @@ export interface BandRowProps {
   readonly words: BandWords | null;
   readonly isChosen: boolean;
   readonly isOpen: boolean;
+  /** Sentences at its own fields. */
+  readonly wrong: ReadonlyMap<string, string>;
+  readonly heed: ReadonlyMap<string, string>;
   readonly onChoose: (id: number) => void;
 }
 
+const NO_TEXTS: Shown['texts'] = {};
+
 /** A band: its patch of cloth, technique, yarn and height in one line; open, everything it is asked. */
-export function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, onChoose }: BandRowProps) {
-  const { typed, wrong } = useHands();
-  const prefix = `bands.${String(index)}.`;
-  const [beginsOpen] = useState(isOpen || [...wrong.keys()].some((field) => field.startsWith(prefix)));
-  const yarn = yarnOf(typed, textOf(band.texts, 'yarn'));
-  const isWrong = [...wrong.keys()].some((field) => field.startsWith(prefix));
+export const BandRow = memo(function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, wrong, heed, onChoose }: BandRowProps) {
+  const { units, yarns } = useShown();
+  const shown = useMemo((): Shown => ({ units, yarns, texts: NO_TEXTS, wrong, heed }), [units, yarns, wrong, heed]);
+  const isWrong = wrong.size > 0;
+  const [beginsOpen] = useState(isOpen || isWrong);
+  const yarn = yarnOf(yarns, textOf(band.texts, 'yarn'));
   return (
     <li id={`band-${String(index)}`}>
       <details className={isChosen ? 'band on' : 'band'} open={beginsOpen} onFocus={() => onChoose(band.id)} onToggle={(event) => { if (event.currentTarget.open) onChoose(band.id); }}>
@@ -39,11 +44,11 @@ export function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen
           <span className="what"><b><span className="hide">Band {index + 1}, </span>{techniqueWords(band)}</b><span className="small quiet">{yarn === undefined ? 'no yarn yet' : yarnWords(yarn, 0)}{isWrong && <span className="wrong-here"><Glyph name="mend" />does not work yet</span>}</span></span>
           <span className="num small">{words !== null && <><b><Parts parts={words.height} /></b><span className="quiet">{words.counts}</span></>}</span>
         </summary>
-        <BandFields {...{ band, index, count, laterIsUp }} />
+        <ShownContext value={shown}><BandFields {...{ band, index, count, laterIsUp }} /></ShownContext>
       </details>
     </li>
   );
-}
+});
 
 function techniqueWords({ texts, shapes }: TypedBand): string {
   const technique = textOf(texts, 'technique');

@@ -1,14 +1,15 @@
+import { memo } from 'react';
 import { ALLOWANCES, askedOfMode, BEAT_BY, ENDS_TOGETHER, FINISH, FIXING, FRINGE, fringeAsked, HANGING, HANGS, hasTwoRows, LOOM, LOOM_KIND, MODE, NAIL_ROWS, OF_MODE, OWN_BEAT, PARITY, SEED, SIZE, SWATCH_BEAT, WARP, WARPING } from '#core/craft/piece-form/asked-of-piece.ts';
-import { textOf } from '#core/craft/piece-form/typed-piece.ts';
+import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { LookButton } from './ActButton.tsx';
 import { AskedField, AskedFields } from './AskedField.tsx';
-import { useHands } from './hands.ts';
+import { useShown } from './hands.ts';
 import { HiddenTexts } from './HiddenTexts.tsx';
 import { YarnRow } from './YarnRow.tsx';
 
 /** The finished size and the loom it is woven on. */
-export function SizeAndLoom() {
-  const { typed: { texts } } = useHands();
+export const SizeAndLoom = memo(function SizeAndLoom() {
+  const { texts } = useShown();
   const twoRows = hasTwoRows(texts);
   return (
     <section aria-labelledby="size-title">
@@ -26,11 +27,11 @@ export function SizeAndLoom() {
       </div>
     </section>
   );
-}
+});
 
 /** The warp: its yarn, how ends are worked, how many there are. */
-export function WarpFields() {
-  const { typed: { texts, warpYarn } } = useHands();
+export const WarpFields = memo(function WarpFields({ warpYarn }: { readonly warpYarn: Texts }) {
+  const { texts } = useShown();
   return (
     <section aria-labelledby="warp-title">
       <h2 className="h3" id="warp-title">Warp</h2>
@@ -42,11 +43,11 @@ export function WarpFields() {
       </div>
     </section>
   );
-}
+});
 
 /** How closely rows lie. Of the two numbers only the one that counts has a field. */
-export function BeatFields() {
-  const { typed: { texts } } = useHands();
+export const BeatFields = memo(function BeatFields() {
+  const { texts } = useShown();
   const by = textOf(texts, BEAT_BY.key);
   const number = by === 'swatch' ? SWATCH_BEAT : by === 'own' ? OWN_BEAT : null;
   const ofMode = askedOfMode(texts);
@@ -64,10 +65,10 @@ export function BeatFields() {
       </div>
     </section>
   );
-}
+});
 
-export function HangingFields() {
-  const { typed: { texts } } = useHands();
+export const HangingFields = memo(function HangingFields() {
+  const { texts } = useShown();
   const fringe = fringeAsked(texts);
   return (
     <section aria-labelledby="hanging-title">
@@ -83,11 +84,11 @@ export function HangingFields() {
       </div>
     </section>
   );
-}
+});
 
 /** Folded, because the standards do for most pieces; each says what it means. */
-export function AllowanceFields() {
-  const { typed: { texts }, wrong } = useHands();
+export const AllowanceFields = memo(function AllowanceFields() {
+  const { texts, wrong } = useShown();
   const isOpen = ALLOWANCES.some(({ key }) => wrong.has(key));
   return (
     <details className="fold" open={isOpen || undefined}>
@@ -99,4 +100,4 @@ export function AllowanceFields() {
       </div>
     </details>
   );
-}
+});

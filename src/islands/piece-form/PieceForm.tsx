@@ -1,13 +1,9 @@
-/**
- * The pattern piece as a form: fields at the left, the piece drawn beside them, its numbers at the right, all of it
- * following as one types. Without script it is the same form; its buttons send it and get it back as it was typed.
- */
-import { useCallback, useDeferredValue, useEffect, useMemo, useReducer, useRef, useState, type SyntheticEvent } from 'react';
-import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
+import { useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, type SyntheticEvent } from 'react';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
+import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import type { Act } from '#core/craft/piece-form/change-typed.ts';
 import { judgeTyped, type Judgement } from '#core/craft/piece-form/judge-typed.ts';
-import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
+import { textOf, type TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { fieldId } from '#islands/ui/field-id.ts';
@@ -15,13 +11,15 @@ import { ToastRegion, useToasts } from '#islands/ui/ToastRegion.tsx';
 import { BandList, useChosenBand, YarnList } from './BandList.tsx';
 import { bandWords, type BandWords } from './band-words.ts';
 import { FormHead, type SaveState } from './FormHead.tsx';
-import { HandsContext, type Hands } from './hands.ts';
+import { HandsContext, ShownContext, type Hands, type Shown } from './hands.ts';
+import { useSame, useSameEntries } from './keep-same.ts';
 import { AllowanceFields, BeatFields, HangingFields, SizeAndLoom, WarpFields } from './LoomFields.tsx';
+import { OtherPieceNotice } from './OtherPieceNotice.tsx';
 import { pieceFormAfter, pieceFormBegins, toldNow } from './piece-form-state.ts';
 import { PieceDrawing } from './PieceDrawing.tsx';
 import { PiecePlan } from './PiecePlan.tsx';
-import { typedBefore } from '#islands/ui/typed-before.ts';
-import { useUnsavedGuard } from './use-unsaved-guard.ts';
+import { usePieceDraft } from './use-piece-draft.ts';
+import { useUndoKeys } from './use-undo-keys.ts';
 
 export interface PieceFormProps {
   /** Address the form is sent to. */
@@ -31,10 +29,12 @@ export interface PieceFormProps {
   readonly typed: TypedPiece;
   /** The form came back because it could not be saved. */
   readonly isTried: boolean;
-  /** The form came back with something that is not saved yet. */
-  readonly isChanged: boolean;
   /** What belongs to no field: that another window saved meanwhile. */
   readonly summary: string;
+  /** It came back with something that is not kept yet. */
+  readonly isChanged: boolean;
+  /** Saving puts it over what another window kept. */
+  readonly isOver: boolean;
   /** Band to be open, by its place. */
   readonly openBand: number | null;
   readonly saved: SaveState;
@@ -55,70 +55,85 @@ function wordsById({ piece, plan, typed }: Made, cloth: WovenPiece): ReadonlyMap
   return new Map(typed.bands.flatMap(({ id }, index) => { const own = words[index]; return own === undefined ? [] : [[id, own]]; }));
 }
 
-export function PieceForm({ action, series, revision, typed: first, isTried, isChanged, summary, openBand, saved }: PieceFormProps) {
-  const [state, tell] = useReducer(pieceFormAfter, null, () => pieceFormBegins(first, isTried, isChanged));
+/** The pattern piece: fields, drawing and numbers, all of one form. Every letter is reckoned and drawn before the next frame. */
+export function PieceForm({ action, series, revision, typed: first, isTried, isChanged, summary, isOver, openBand, saved }: PieceFormProps) {
+  const [state, tell] = useReducer(pieceFormAfter, null, () => pieceFormBegins(first, isTried));
   const { typed } = state;
+  const { units, yarns, texts, bands } = typed;
   const [chosen, choose] = useChosenBand(openBand);
   const form = useRef<HTMLFormElement>(null);
   const toasts = useToasts();
-  // Letters stand at once; picture and numbers follow as soon as the browser has drawn them.
-  const settled = useDeferredValue(typed);
-  const judged = useMemo(() => judgeTyped(settled), [settled]);
-  const made = useLastMade(judged, settled);
+  const { keeping, keepMine, takeOther, sent } = usePieceDraft({ form, series: series.slug, revision, typed, isChanged, isOver, tell });
+  const judged = useMemo(() => judgeTyped(typed), [typed]);
+  const made = useLastMade(judged, typed);
   const cloth = useMemo(() => (made === null ? null : clothPieceOf(made.piece, made.plan, series.name)), [made, series.name]);
-  const words = useMemo(() => (made === null || cloth === null ? NO_WORDS : wordsById(made, cloth)), [made, cloth]);
-  const told = useMemo(() => toldNow(state, judged), [state.isTried, state.inHand, judged]);
-  const sending = useUnsavedGuard(state.isChanged);
+  const words = useSameEntries(useMemo(() => (made === null || cloth === null ? NO_WORDS : wordsById(made, cloth)), [made, cloth]));
+  const wrong = useSame(useMemo(() => new Map(toldNow(state, judged).map(({ field, says }) => [field, says])), [state.isTried, state.inHand, judged]));
+  const warnings = useSame(judged.ok ? judged.warnings : NOTHING);
+  const heed = useMemo(() => new Map(warnings.map(({ field, says }) => [field, says])), [warnings]);
 
-  const type = useCallback((field: string, text: string) => { tell({ kind: 'type', field, text }); }, []);
-  const act = useCallback((done: Act) => {
-    tell({ kind: 'act', act: done });
-    const gone = takenOutWords(done);
-    if (gone !== null) toasts.say(gone, { act: { label: 'Put it back', run: () => { tell({ kind: 'put-back' }); } } });
-  }, [toasts.say]);
-  const hands = useMemo((): Hands => ({
-    typed, type, act, action,
-    wrong: new Map(told.map(({ field, says }) => [field, says])),
-    heed: new Map(judged.ok ? judged.warnings.map(({ field, says }) => [field, says]) : []),
-  }), [typed, told, judged, type, act, action]);
-
-  useEffect(() => { if (form.current !== null) for (const [field, text] of typedBefore(form.current)) type(field, text); }, [type]);
+  const undo = useCallback(() => { tell({ kind: 'undo' }); }, []);
+  const redo = useCallback(() => { tell({ kind: 'redo' }); }, []);
+  useUndoKeys(undo, redo);
+  const hands = useHandsOf(tell, toasts, action, typed);
+  const shown = useMemo((): Shown => ({ units, yarns, texts, wrong, heed }), [units, yarns, texts, wrong, heed]);
   useFocusOnFresh(form, state.fresh);
 
-  const trySaving = (event: SyntheticEvent) => {
-    if (judgeTyped(typed).ok) { sending(); return; }
+  const trySaving = (event: SyntheticEvent<HTMLFormElement, SubmitEvent>) => {
+    const { submitter } = event.nativeEvent;
+    const saves = !(submitter instanceof HTMLButtonElement) || submitter.value === 'save';
+    if (!saves || judgeTyped(typed).ok) { sent(); return; }
     event.preventDefault();
     tell({ kind: 'try' });
     requestAnimationFrame(() => { document.getElementById('piece-errors')?.focus(); });
   };
 
   return (
-    <HandsContext value={hands}>
+    <HandsContext value={hands}><ShownContext value={shown}>
       <form ref={form} className="piece-form" method="post" action={action} noValidate aria-label={`The piece of ${series.name}`} onSubmit={trySaving} onFocus={(event) => { tell({ kind: 'enter', field: nameOf(event.target) }); }} onBlur={(event) => { tell({ kind: 'leave', field: nameOf(event.target) }); }}>
         <input type="hidden" name="series" value={series.slug} />
-        <input type="hidden" name="revision" value={revision} />
-        <input type="hidden" name="units" value={typed.units} />
-        <FormHead {...{ series, saved, summary, judged }} isTried={state.isTried} isChanged={state.isChanged} />
-        <PieceDrawing cloth={cloth} isOld={!judged.ok && cloth !== null} chosen={typed.bands.findIndex(({ id }) => id === chosen)} units={typed.units} />
+        <input type="hidden" name="revision" value={keeping.revision} />
+        <input type="hidden" name="units" value={units} />
+        {isOver && keeping.savedAt === null && <input type="hidden" name="over" value="yes" />}
+        <FormHead {...{ series, saved, keeping, summary, judged }} isTried={state.isTried} undo={state.past.length === 0 ? null : undo} redo={state.future.length === 0 ? null : redo} />
+        {keeping.behind !== null && <div className="other"><OtherPieceNotice other={keeping.behind} title={series.name} onKeep={keepMine} onTake={takeOther} /></div>}
+        <PieceDrawing cloth={cloth} isOld={!judged.ok && cloth !== null} chosen={bands.findIndex(({ id }) => id === chosen)} units={units} />
         <div className="fields">
           <SizeAndLoom />
-          <WarpFields />
-          <YarnList fresh={state.fresh} />
-          <BandList words={words} chosen={chosen} onChoose={choose} open={openBand} fresh={state.fresh} />
+          <WarpFields warpYarn={typed.warpYarn} />
+          <YarnList bands={bands} fresh={state.fresh} />
+          <BandList bands={bands} laterIsUp={textOf(texts, 'hangs') !== 'turned'} words={words} chosen={chosen} onChoose={choose} open={openBand} fresh={state.fresh} />
           <BeatFields />
           <HangingFields />
           <AllowanceFields />
           <p><button type="submit" name="do" value="save" className="btn">Save the piece</button></p>
         </div>
-        <PiecePlan made={made} isOld={!judged.ok && made !== null} warnings={judged.ok ? judged.warnings : []} typed={typed} />
+        <PiecePlan made={made} isOld={!judged.ok && made !== null} warnings={warnings} yarns={yarns} units={units} />
         <p className="hide" role="status">{state.news}</p>
       </form>
       <ToastRegion toasts={toasts} />
-    </HandsContext>
+    </ShownContext></HandsContext>
   );
 }
 
+const NOTHING: readonly [] = [];
 const nameOf = (target: EventTarget): string => (target instanceof HTMLInputElement ? target.name : '');
+
+/** The same functions as long as the form lives. */
+function useHandsOf(tell: (event: Parameters<typeof pieceFormAfter>[1]) => void, { say }: ReturnType<typeof useToasts>, action: string, typed: TypedPiece): Hands {
+  const now = useRef(typed);
+  useEffect(() => { now.current = typed; }, [typed]);
+  return useMemo(() => ({
+    action,
+    type: (field, text) => { tell({ kind: 'type', field, text }); },
+    act: (act) => {
+      const before = now.current;
+      tell({ kind: 'act', act });
+      const gone = takenOutWords(act);
+      if (gone !== null) say(gone, { act: { label: 'Put it back', run: () => { tell({ kind: 'replace', typed: before, news: 'It is back.' }); } } });
+    },
+  }), [tell, say, action]);
+}
 
 function takenOutWords(act: Act): string | null {
   switch (act.do) {
@@ -135,16 +150,13 @@ function takenOutWords(act: Act): string | null {
 
 /** The last form that could be woven: what is drawn while something typed does not work. */
 function useLastMade(judged: Judgement, typed: TypedPiece): Made | null {
-  const [kept, keep] = useState<Made | null>(null);
-  if (!judged.ok || kept?.judged === judged) return kept;
-  const { piece, plan } = judged;
-  const made = { judged, piece, plan, typed };
-  keep(made);
-  return made;
+  const kept = useRef<Made | null>(null);
+  if (judged.ok && kept.current?.judged !== judged) kept.current = { judged, piece: judged.piece, plan: judged.plan, typed };
+  return kept.current;
 }
 
 /** Hands go on in the row that was just put in. */
-function useFocusOnFresh(form: React.RefObject<HTMLFormElement | null>, fresh: string | null): void {
+function useFocusOnFresh(form: RefObject<HTMLFormElement | null>, fresh: string | null): void {
   useEffect(() => {
     if (fresh === null) return;
     const field = form.current?.querySelector<HTMLElement>(`#${fieldId(fresh)}`);

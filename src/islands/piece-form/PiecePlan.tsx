@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { amountOf } from '#core/craft/amounts.ts';
 import type { Found } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
@@ -18,7 +19,8 @@ interface PiecePlanProps {
   readonly made: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan } | null;
   readonly isOld: boolean;
   readonly warnings: readonly Found[];
-  readonly typed: TypedPiece;
+  readonly yarns: TypedPiece['yarns'];
+  readonly units: Units;
 }
 
 const ROWS = ['ends', 'spacing', 'nails', 'warp', 'loom.width', 'loom.height', 'spacer.height', 'dowel.length', 'cord', 'mass', 'hours'] as const;
@@ -28,20 +30,20 @@ const SHORT: Readonly<Record<string, string>> = {
 };
 
 /** All numbers of the piece, as a student with the same loom would get them, and what is worth a look. */
-export function PiecePlan({ made, isOld, warnings, typed }: PiecePlanProps) {
+export const PiecePlan = memo(function PiecePlan({ made, isOld, warnings, yarns, units }: PiecePlanProps) {
   return (
     <aside className="plan stack" aria-label="Plan">
       <h2 className="h3">Plan</h2>
-      {made === null ? <p className="quiet">Ends, rows, yarn and hours stand here once the piece can be woven.</p> : <Numbers {...made} units={typed.units} isOld={isOld} />}
+      {made === null ? <p className="quiet">Ends, rows, yarn and hours stand here once the piece can be woven.</p> : <Numbers {...made} units={units} isOld={isOld} />}
       {warnings.length > 0 && (
         <div className="notice">
           <h3 className="h4">Worth a look</h3>
-          <Findings found={warnings.map(({ field, says, code }) => ({ code, says: <><a href={`#${fieldId(field)}`}>{placeOfField(field, typed) || 'The piece'}</a>: {says}</> }))} />
+          <Findings found={warnings.map(({ field, says, code }) => ({ code, says: <><a href={`#${fieldId(field)}`}>{placeOfField(field, { yarns }) || 'The piece'}</a>: {says}</> }))} />
         </div>
       )}
     </aside>
   );
-}
+});
 
 function Numbers({ piece, plan, units, isOld }: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan; readonly units: Units; readonly isOld: boolean }) {
   const rows = plan.bands.reduce((sum, { picks = 0 }) => sum + picks, 0);

@@ -5,12 +5,13 @@ import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 
 export interface PieceFormState {
   readonly typed: TypedPiece;
-  /** Something differs from what was saved. */
-  readonly isChanged: boolean;
   /** Saving was tried, so what is missing is told as well. */
   readonly isTried: boolean;
-  /** What there was before the last row was taken out. */
-  readonly before: TypedPiece | null;
+  /** How the form stood before each step, the newest last; and what was undone, the next to come last. */
+  readonly past: readonly TypedPiece[];
+  readonly future: readonly TypedPiece[];
+  /** The field of the step that is going on: what is typed into one field in one go is one step. */
+  readonly run: string | null;
   /** The field the hands are in: a length half typed is not told off. */
   readonly inHand: string | null;
   /** The row that came in last, by the id of its first field. */
@@ -22,12 +23,17 @@ export interface PieceFormState {
 export type PieceFormEvent =
   | { readonly kind: 'type'; readonly field: string; readonly text: string }
   | { readonly kind: 'act'; readonly act: Act }
-  | { readonly kind: 'put-back' }
+  /** Another form altogether: put back, brought back, or taken from another window. */
+  | { readonly kind: 'replace'; readonly typed: TypedPiece; readonly news: string }
+  | { readonly kind: 'undo' | 'redo' }
   | { readonly kind: 'enter' | 'leave'; readonly field: string }
   | { readonly kind: 'try' };
 
-export function pieceFormBegins(typed: TypedPiece, isTried: boolean, isChanged: boolean): PieceFormState {
-  return { typed, isChanged, isTried, before: null, inHand: null, fresh: null, news: '' };
+/** Steps that can be undone. */
+const MOST_STEPS = 100;
+
+export function pieceFormBegins(typed: TypedPiece, isTried: boolean): PieceFormState {
+  return { typed, isTried, past: [], future: [], run: null, inHand: null, fresh: null, news: '' };
 }
 
 /** `Band 4 is now third` */
@@ -65,22 +71,41 @@ function freshOf(act: Act, typed: TypedPiece): string | null {
   }
 }
 
-const takesOut = ({ do: what }: Act): boolean => what.startsWith('take-out');
+/** A step to `typed`; one that changes nothing is none. */
+function stepTo(state: PieceFormState, typed: TypedPiece, run: string | null): PieceFormState {
+  if (typed === state.typed) return state;
+  const goesOn = run !== null && run === state.run;
+  return { ...state, typed, run, past: goesOn ? state.past : [...state.past, state.typed].slice(-MOST_STEPS), future: [], fresh: null, news: '' };
+}
+
+function goBack(state: PieceFormState): PieceFormState {
+  const typed = state.past.at(-1);
+  return typed === undefined ? { ...state, news: 'Nothing to undo.' } : { ...state, typed, past: state.past.slice(0, -1), future: [...state.future, state.typed], run: null, fresh: null, news: 'Undone.' };
+}
+
+function goForth(state: PieceFormState): PieceFormState {
+  const typed = state.future.at(-1);
+  return typed === undefined ? { ...state, news: 'Nothing to redo.' } : { ...state, typed, past: [...state.past, state.typed], future: state.future.slice(0, -1), run: null, fresh: null, news: 'Done again.' };
+}
 
 export function pieceFormAfter(state: PieceFormState, event: PieceFormEvent): PieceFormState {
   switch (event.kind) {
     case 'type':
-      return { ...state, typed: typeIn(state.typed, event.field, event.text), isChanged: true, fresh: null };
+      return stepTo(state, typeIn(state.typed, event.field, event.text), event.field);
     case 'act': {
-      const before = takesOut(event.act) ? state.typed : state.before;
-      return { ...state, typed: changeTyped(state.typed, event.act), isChanged: true, before, inHand: null, fresh: freshOf(event.act, state.typed), news: newsOf(event.act, state.typed) };
+      const { act } = event;
+      return { ...stepTo(state, changeTyped(state.typed, act), null), inHand: null, fresh: freshOf(act, state.typed), news: newsOf(act, state.typed) };
     }
-    case 'put-back':
-      return state.before === null ? state : { ...state, typed: state.before, before: null, news: 'It is back.' };
+    case 'replace':
+      return { ...stepTo(state, event.typed, null), news: event.news };
+    case 'undo':
+      return goBack(state);
+    case 'redo':
+      return goForth(state);
     case 'enter':
       return { ...state, inHand: event.field };
     case 'leave':
-      return state.inHand === event.field ? { ...state, inHand: null } : state;
+      return { ...state, run: null, inHand: state.inHand === event.field ? null : state.inHand };
     case 'try':
       return { ...state, isTried: true, inHand: null };
   }
@@ -93,14 +118,14 @@ export function toldNow({ isTried, inHand }: PieceFormState, judged: Judgement):
 }
 
 /** `Band 3, Height` or `Yarn ground`: where a sentence belongs, for lists that stand apart from the fields. */
-export function placeOfField(field: string, typed: TypedPiece): string {
+export function placeOfField(field: string, { yarns }: Pick<TypedPiece, 'yarns'>): string {
   const [group, index, kind, shape] = field.split('.');
   if (group === 'bands' && index !== undefined) {
     const band = `Band ${String(Number(index) + 1)}`;
     return kind === 'shapes' && shape !== undefined ? `${band}, shape ${String(Number(shape) + 1)}` : band;
   }
   if (group === 'yarns' && index !== undefined) {
-    const role = typed.yarns[Number(index)]?.texts['role'] ?? '';
+    const role = yarns[Number(index)]?.texts['role'] ?? '';
     return role === '' ? `Yarn ${String(Number(index) + 1)}` : `Yarn ${role}`;
   }
   if (field.startsWith('warp.yarn')) return 'Warp yarn';

@@ -11,10 +11,10 @@ export function yarnWords(texts: Texts, index: number): string {
   return [role === '' ? `Yarn ${String(index + 1)}` : role, shade(texts)].filter((word) => word !== '').join(', ');
 }
 
-export const yarnOf = (typed: TypedPiece, id: string): Texts | undefined => typed.yarns.find((yarn) => String(yarn.id) === id)?.texts;
+export const yarnOf = (yarns: TypedPiece['yarns'], id: string): Texts | undefined => yarns.find((yarn) => String(yarn.id) === id)?.texts;
 
 /** The yarns a band can be woven with; where its own was taken out, an empty choice first. */
-export function yarnChoices({ yarns }: TypedPiece, chosen: string): { value: string; label: string }[] {
+export function yarnChoices(yarns: TypedPiece['yarns'], chosen: string): { value: string; label: string }[] {
   const known = yarns.map(({ id, texts }, index) => ({ value: String(id), label: yarnWords(texts, index) }));
   return known.some(({ value }) => value === chosen) ? known : [{ value: '', label: 'Choose a yarn' }, ...known];
 }

@@ -2,8 +2,8 @@ import { useCallback, useEffect, useRef, useState, type ReactNode } from 'react'
 import type { TextRemarks } from '#contracts/workroom.ts';
 import { Button } from '#islands/ui/Button.tsx';
 import { Notice } from '#islands/ui/Notice.tsx';
-import { readCopy } from '#islands/writing/device-copy.ts';
-import { statusWords } from '#islands/writing/editing.ts';
+import { readCopy } from '#islands/keeping/device-copy.ts';
+import { statusWords } from '#islands/keeping/keeping.ts';
 import { stretchOfLine, stretchOfRemark, wordsOfLine, type Stretch } from '#islands/writing/lines.ts';
 import { PictureDialog } from '#islands/writing/PictureDialog.tsx';
 import { OtherText } from '#islands/writing/OtherText.tsx';

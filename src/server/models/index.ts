@@ -19,6 +19,7 @@ export { Order } from './order.ts';
 export { PartOpening } from './part-opening.ts';
 export { PatternPiece } from './piece.ts';
 export { PaymentEvent } from './payment-event.ts';
+export { PieceDraft } from './piece-draft.ts';
 export { PhotoNote } from './photo-note.ts';
 export { ProgressPhoto } from './progress-photo.ts';
 export { RefusedAddress } from './refused-address.ts';

@@ -41,6 +41,7 @@ export const RATE_RULES = {
   seriesFolder: { name: 'series-folder', limit: 60, windowSeconds: 3_600 },
   /** Drafts kept by themselves, of one teacher. */
   lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },
+  pieceDraft: { name: 'piece-draft', limit: 120, windowSeconds: 60 },
 } as const satisfies Record<string, RateRule>;
 
 /** The part of a network address that one household or office shares: /24 of IPv4, /64 of IPv6. */

@@ -35,6 +35,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/video-place': 'signed-in',
   '/api/videos/[...upload]': 'teacher',
   '/api/workroom/lesson-draft': 'teacher',
+  '/api/workroom/piece-draft': 'teacher',
   '/api/workroom/pictures': 'teacher',
   '/api/workroom/captions': 'teacher',
   '/api/workroom/series-folder/[slug]': 'teacher',

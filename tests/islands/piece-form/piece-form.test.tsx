@@ -11,21 +11,42 @@ import { pieceFormAfter, pieceFormBegins, placeOfField, placeWord, toldNow, type
 
 const lowTide = JSON.parse(readFileSync('content/series/low-tide/piece.json', 'utf8')) as FrameLoomPiece;
 const typed = typePiece(lowTide, 'cm');
-const after = (...events: PieceFormEvent[]): PieceFormState => events.reduce(pieceFormAfter, pieceFormBegins(typed, false, false));
+const after = (...events: PieceFormEvent[]): PieceFormState => events.reduce(pieceFormAfter, pieceFormBegins(typed, false));
 
 afterEach(cleanup);
 
 describe('the state of the form', () => {
-  test('what is typed counts as not saved', () => {
-    const state = after({ kind: 'type', field: 'size.widthMm', text: '42' });
-    expect([state.typed.texts['size.widthMm'], state.isChanged]).toEqual(['42', true]);
+  const width = (text: string): PieceFormEvent => ({ kind: 'type', field: 'size.widthMm', text });
+  const widthOf = ({ typed: { texts } }: PieceFormState): string | undefined => texts['size.widthMm'];
+
+  test('what was typed into a field in one go is undone in one step, and done again', () => {
+    const state = after(width('4'), width('42'));
+    expect([widthOf(state), widthOf(pieceFormAfter(state, { kind: 'undo' })), widthOf(pieceFormAfter(pieceFormAfter(state, { kind: 'undo' }), { kind: 'redo' }))]).toEqual(['42', '40', '42']);
   });
 
-  test('a row taken out can be put back, with everything that stood there', () => {
-    const out = after({ kind: 'act', act: { do: 'take-out-band', band: 6 } });
-    expect(out.typed.bands).toHaveLength(13);
-    expect(pieceFormAfter(out, { kind: 'put-back' }).typed).toEqual(typed);
-    expect(pieceFormAfter(pieceFormAfter(out, { kind: 'put-back' }), { kind: 'put-back' }).typed).toEqual(typed);
+  test('a field that was left and entered again is a step of its own', () => {
+    const state = after(width('42'), { kind: 'leave', field: 'size.widthMm' }, width('43'));
+    expect(widthOf(pieceFormAfter(state, { kind: 'undo' }))).toBe('42');
+  });
+
+  test('a row taken out is undone with everything that stood there, and moves and splits too', () => {
+    for (const act of [{ do: 'take-out-band', band: 6 }, { do: 'later', band: 2 }, { do: 'copy-band', band: 0 }] as const) {
+      const done = after({ kind: 'act', act });
+      expect(done.typed).not.toEqual(typed);
+      expect(pieceFormAfter(done, { kind: 'undo' }).typed).toEqual(typed);
+    }
+  });
+
+  test('a hundred steps are remembered and no more; something new forgets what was undone', () => {
+    const many = after(...Array.from({ length: 130 }, (_, step) => [width(String(step)), { kind: 'leave', field: 'size.widthMm' } as const]).flat());
+    const back = Array.from({ length: 130 }).reduce<PieceFormState>((state) => pieceFormAfter(state, { kind: 'undo' }), many);
+    expect(widthOf(back)).toBe('29');
+    expect(back.news).toBe('Nothing to undo.');
+    expect(pieceFormAfter(back, width('7')).future).toEqual([]);
+  });
+
+  test('an act that changes nothing is no step', () => {
+    expect(after({ kind: 'act', act: { do: 'look' } }).past).toEqual([]);
   });
 
   test('a move is told in words, and the first band cannot go before itself', () => {
@@ -40,7 +61,7 @@ describe('the state of the form', () => {
   });
 
   test('an empty field is no fault before saving was tried, nor a half typed length while it is typed', () => {
-    const empty = pieceFormBegins(emptyForm('cm'), false, false);
+    const empty = pieceFormBegins(emptyForm('cm'), false);
     expect(toldNow(empty, judgeTyped(empty.typed))).toEqual([]);
     expect(toldNow(pieceFormAfter(empty, { kind: 'try' }), judgeTyped(empty.typed)).length).toBeGreaterThan(3);
     const half = after({ kind: 'enter', field: 'size.widthMm' }, { kind: 'type', field: 'size.widthMm', text: '12 1/' });
@@ -60,7 +81,7 @@ const small: FrameLoomPiece = {
   beat: { picksPerWeftDiameter: 0.7 }, yarns: { ground: { metresPer100g: 180 } },
   bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 60 }, { technique: 'tabby', name: 'sky', yarn: 'ground', fill: true }],
 };
-const props: PieceFormProps = { action: '?_action=x', series: { slug: 'low-tide', name: 'Low Tide' }, revision: 3, typed: typePiece(small, 'cm'), isTried: false, isChanged: false, summary: '', openBand: null, saved: { words: 'Saved today 14:02' } };
+const props: PieceFormProps = { action: '?_action=x', series: { slug: 'low-tide', name: 'Low Tide' }, revision: 3, typed: typePiece(small, 'cm'), isTried: false, isChanged: false, isOver: false, summary: '', openBand: null, saved: { words: 'Saved today 14:02', isDraft: false, pieceWords: 'today 14:02', asideWords: null } };
 
 const open = (): void => { render(<PieceForm {...props} />); };
 
@@ -94,7 +115,7 @@ describe('the form on the page', () => {
   test('takes up what was typed before its script woke', async () => {
     await wake(() => { field('size.widthMm').value = '31,5'; });
     expect(ends()).toBe('Warp ends64\u00a0ends');
-    expect(screen.getByText('Not saved yet')).toBeTruthy();
+    expect(screen.getByText('Not saved yet.')).toBeTruthy();
   });
 
   test('numbers follow what is typed', () => {
@@ -102,7 +123,7 @@ describe('the form on the page', () => {
     expect(ends()).toBe('Warp ends62\u00a0ends');
     retype('size.widthMm', '31,5');
     expect(ends()).toBe('Warp ends64\u00a0ends');
-    expect(screen.getByText('Not saved yet')).toBeTruthy();
+    expect(screen.getByText('Not saved yet.')).toBeTruthy();
   });
 
   test('what cannot be woven is said at its field, the picture stays, and nothing is sent', () => {

@@ -1,6 +1,7 @@
 import { describe, expect, it } from 'vitest';
 import type { DraftKept } from '#contracts/workroom.ts';
-import { beginEditing, editingAfter, isUnsaved, maySave, statusWords, type EditEvent, type Editing } from '#islands/writing/editing.ts';
+import { isUnsaved, maySave, statusWords } from '#islands/keeping/keeping.ts';
+import { beginEditing, editingAfter, type EditEvent, type Editing } from '#islands/writing/editing.ts';
 import { lineAt, stretchOfLine, stretchOfRemark, wordsOfLine } from '#islands/writing/lines.ts';
 import { putIn, type Snippet } from '#islands/writing/put-in.ts';
 
@@ -32,7 +33,7 @@ describe('a text being written', () => {
   });
 
   it('keeps nothing by itself after another window was first, until its writer has decided', () => {
-    const behind = [{ kind: 'typed' }, { kind: 'save-began' }, { kind: 'behind', revision: 9, source: 'Theirs.' }] as const;
+    const behind = [{ kind: 'typed' }, { kind: 'save-began' }, { kind: 'behind', other: { revision: 9, source: 'Theirs.' } }] as const;
     expect([maySave(after(...behind)), isUnsaved(after(...behind))]).toEqual([false, true]);
     const mine = after(...behind, { kind: 'keep-mine' });
     expect([maySave(mine), mine.revision, mine.behind]).toEqual([true, 9, null]);

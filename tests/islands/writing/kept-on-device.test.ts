@@ -1,6 +1,7 @@
 import { afterEach, describe, expect, it, vi } from 'vitest';
-import { readCopy, writeCopy } from '#islands/writing/device-copy.ts';
-import { beginEditing, editingAfter, statusWords } from '#islands/writing/editing.ts';
+import { readCopy, writeCopy } from '#islands/keeping/device-copy.ts';
+import { statusWords } from '#islands/keeping/keeping.ts';
+import { beginEditing, editingAfter } from '#islands/writing/editing.ts';
 import { anchorAt } from '#islands/writing/preview-anchor.ts';
 import { putIn } from '#islands/writing/put-in.ts';
 import { Reader } from '#islands/writing/reader.ts';

@@ -3,7 +3,7 @@ import { DEFAULT_ALLOWANCES, FRINGE_BUNDLE_ENDS, NAIL_DIAMETER_MM, TAKE_UP_UNKNO
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import type { LoomKindName } from '#core/craft/piece.ts';
 import { option, type Asked, type Option } from './asked.ts';
-import { textOf, type Texts, type TypedPiece } from './typed-piece.ts';
+import { textOf, type Texts } from './typed-piece.ts';
 
 export const SIZE: readonly Asked[] = [
   { key: 'size.widthMm', kind: 'length', label: 'Width', needed: true },
@@ -131,11 +131,11 @@ export const HANGS: Asked = {
 
 export const SEED: Asked = { key: 'seed', kind: 'number', label: 'Chance of the drawing', hint: 'Another whole number lets the yarn fall another way.', otherwise: 'our own' };
 
-const modeOf = ({ texts }: TypedPiece): 'balanced' | 'straight-warp' => (textOf(texts, 'mode') === 'balanced' ? 'balanced' : 'straight-warp');
-const marginOf = ({ texts }: TypedPiece): number => DEFAULT_ALLOWANCES.marginWeft[textOf(texts, 'beat.by') === 'swatch' ? 'swatch' : 'unmeasured'];
+const modeOf = (texts: Texts): 'balanced' | 'straight-warp' => (textOf(texts, 'mode') === 'balanced' ? 'balanced' : 'straight-warp');
+const marginOf = (texts: Texts): number => DEFAULT_ALLOWANCES.marginWeft[textOf(texts, 'beat.by') === 'swatch' ? 'swatch' : 'unmeasured'];
 
 export const ALLOWANCES: readonly Asked[] = [
-  { key: 'allowances.drawIn', kind: 'share', label: 'Draw-in', hint: 'How much narrower the cloth is than the warp on the loom.', standard: (typed) => DEFAULT_ALLOWANCES.drawIn[modeOf(typed)] },
+  { key: 'allowances.drawIn', kind: 'share', label: 'Draw-in', hint: 'How much narrower the cloth is than the warp on the loom.', standard: (texts) => DEFAULT_ALLOWANCES.drawIn[modeOf(texts)] },
   { key: 'allowances.relaxation', kind: 'share', label: 'Relaxation', hint: 'How much shorter it gets when the warp is cut.', standard: () => DEFAULT_ALLOWANCES.relaxation },
   { key: 'allowances.wetShrinkage', kind: 'share', label: 'Wet shrinkage', hint: 'How much it shrinks in water, if it is washed.', standard: () => DEFAULT_ALLOWANCES.wetShrinkage },
   { key: 'allowances.topMm', kind: 'length', label: 'Bare warp above', hint: 'Where no needle passes any more, at least.', standard: () => DEFAULT_ALLOWANCES.topMm },

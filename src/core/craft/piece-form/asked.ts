@@ -1,5 +1,5 @@
 /** What a form asks: for each field its key, its kind and its words. */
-import type { TypedPiece } from './typed-piece.ts';
+import type { Texts } from './typed-piece.ts';
 
 export interface Option {
   /** What the form sends. */
@@ -18,8 +18,8 @@ interface AskedWords {
   readonly hint?: string;
   /** It must be filled in. */
   readonly needed?: true;
-  /** What counts where it stays empty, as a value of the piece; shown beside the field. */
-  readonly standard?: (typed: TypedPiece) => number;
+  /** What counts where it stays empty, as a value of the piece, by what is asked once; shown beside the field. */
+  readonly standard?: (texts: Texts) => number;
   /** The same in words, where it is no number. */
   readonly otherwise?: string;
   /** What a new row begins with, as a value of the piece. */

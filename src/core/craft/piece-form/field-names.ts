@@ -19,6 +19,9 @@ export const ONCE_KEYS: readonly string[] = [...ASKED_ONCE, ...BEAT_FIELDS].map(
 /** The text a form sent under this name; undefined when it has no such field. */
 export type Ask = (name: string) => string | undefined;
 
+/** A whole form: the text of each field by its name. */
+export type FormTexts = Readonly<Record<string, string>>;
+
 function textsOf(ask: Ask, keys: readonly string[], prefix: string): Texts {
   return Object.fromEntries(keys.flatMap((key) => {
     const text = ask(`${prefix}${key}`);
@@ -77,6 +80,10 @@ export function fieldsOfTyped({ units, texts, warpYarn, yarns, bands }: TypedPie
     ]),
   ]);
 }
+
+/** The same as one plain object, to be kept or sent, and back. What the form does not ask is left out. */
+export const textsOfTyped = (typed: TypedPiece): FormTexts => Object.fromEntries(fieldsOfTyped(typed));
+export const typedOfTexts = (texts: FormTexts): TypedPiece => typedOfFields((name) => (Object.hasOwn(texts, name) ? texts[name] : undefined));
 
 const WARP_YARN = 'warp.yarn';
 /** What a piece calls the thickness of a yarn is one field of the form. */

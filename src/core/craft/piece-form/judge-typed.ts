@@ -1,6 +1,6 @@
 /** What a form comes to: the piece and its plan, or a sentence at every field that stands in the way. */
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
-import { planPiece } from '#core/craft/plan.ts';
+import { planWoven } from '#core/craft/frame-loom/plan-woven.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Problem } from '#core/outcome.ts';
 import { fieldOfPlace } from './field-names.ts';
@@ -29,7 +29,7 @@ export function judgeTyped(typed: TypedPiece): Judgement {
   const { piece: read, faults } = readTyped(typed);
   // It may lack anything yet: planning it tells what.
   const piece = read as FrameLoomPiece;
-  const plan = planPiece(piece, typed.units);
+  const plan = planWoven(piece, typed.units);
   if (plan.ok && faults.size === 0) return { ok: true, piece, plan: plan.value, warnings: placed(plan.warnings, typed) };
   const own = [...faults].map(([field, fault]): Found => ({ field, ...fault }));
   const engine = plan.ok ? [] : placed(plan.problems, typed);

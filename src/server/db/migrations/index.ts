@@ -12,6 +12,7 @@ import { addWovenSoFar } from './0009-add-woven-so-far.ts';
 import { createOpenings } from './0010-create-openings.ts';
 import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 import { createCalendars } from './0012-create-calendars.ts';
+import { createPieceDrafts } from './0013-create-piece-drafts.ts';
 import { createNotices } from './0016-create-notices.ts';
 
 export const migrations: readonly Migration[] = [
@@ -27,5 +28,6 @@ export const migrations: readonly Migration[] = [
   createOpenings,
   createEarlierDrafts,
   createCalendars,
+  createPieceDrafts,
   createNotices,
 ];

@@ -9,8 +9,8 @@ const form = typePiece(PLAIN_PIECE, 'cm');
 
 describe('an allowance left empty', () => {
   const standards = (mode: 'straight-warp' | 'balanced', by: string): unknown => {
-    const typed = typeIn(typeIn(form, 'mode', mode), 'beat.by', by);
-    return Object.fromEntries(ALLOWANCES.flatMap(({ key, standard }) => (standard === undefined ? [] : [[key.replace('allowances.', ''), standard(typed)]])));
+    const { texts } = typeIn(typeIn(form, 'mode', mode), 'beat.by', by);
+    return Object.fromEntries(ALLOWANCES.flatMap(({ key, standard }) => (standard === undefined ? [] : [[key.replace('allowances.', ''), standard(texts)]])));
   };
 
   test.each(['straight-warp', 'balanced'] as const)('says the number the plan then takes, the warp being %s', (mode) => {

@@ -6,12 +6,12 @@ export interface DeviceCopy {
   readonly source: string;
 }
 
-const keyOf = (lesson: string): string => `fellmark-draft-${lesson}`;
+const keyOf = (name: string): string => `fellmark-draft-${name}`;
 
-/** Null when nothing waits, or when the browser keeps nothing. */
-export function readCopy(lesson: string): DeviceCopy | null {
+/** @param name of the draft, its own in this house. Null when nothing waits, or when the browser keeps nothing. */
+export function readCopy(name: string): DeviceCopy | null {
   try {
-    const copy: unknown = JSON.parse(localStorage.getItem(keyOf(lesson)) ?? 'null');
+    const copy: unknown = JSON.parse(localStorage.getItem(keyOf(name)) ?? 'null');
     if (typeof copy !== 'object' || copy === null || !('revision' in copy) || !('source' in copy)) return null;
     const { revision, source } = copy;
     return typeof revision === 'number' && typeof source === 'string' ? { revision, source } : null;
@@ -21,10 +21,10 @@ export function readCopy(lesson: string): DeviceCopy | null {
 }
 
 /** @returns false when the browser would not keep it. */
-export function writeCopy(lesson: string, copy: DeviceCopy | null): boolean {
+export function writeCopy(name: string, copy: DeviceCopy | null): boolean {
   try {
-    if (copy === null) localStorage.removeItem(keyOf(lesson));
-    else localStorage.setItem(keyOf(lesson), JSON.stringify(copy));
+    if (copy === null) localStorage.removeItem(keyOf(name));
+    else localStorage.setItem(keyOf(name), JSON.stringify(copy));
     return true;
   } catch {
     return false;
