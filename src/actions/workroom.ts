@@ -1,7 +1,7 @@
 /** Forms of the teacher's workroom: series, parts and their order, texts, settings, gathering lists, publishing. */
 import {
-  GatheringForm, GatheringItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
-  NewGatheringForm, NewLessonForm, NewSeriesForm, RestoreTextForm, SeriesDetailsForm, SeriesForm,
+  GatheringForm, GatheringItemForm, KeptThingForm, KeptThingItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
+  NewGatheringForm, NewKeptThingForm, NewLessonForm, NewSeriesForm, RestoreTextForm, SeriesDetailsForm, SeriesForm,
 } from '#contracts/workroom.ts';
 import { partsList } from '#core/series/parts-list.ts';
 import { clockWords } from '#core/moment-words.ts';
@@ -10,10 +10,11 @@ import { signedIn } from '#server/errors.ts';
 import { publishPart } from '#server/use-cases/series/publish-part.ts';
 import { publishSeries } from '#server/use-cases/series/publish-series.ts';
 import { takeBackSeries } from '#server/use-cases/series/take-back-series.ts';
-import { addGatheringItem, moveGatheringItem, saveGatheringItem, takeOutGatheringItem, type LinePlace } from '#server/use-cases/workroom/change-gathering.ts';
+import { addGatheringItem, moveGatheringItem, putBackGatheringItem, saveGatheringItem, takeOutGatheringItem, type LinePlace } from '#server/use-cases/workroom/change-gathering.ts';
 import type { PartPlace } from '#server/use-cases/workroom/_part-place.ts';
 import { addLesson, moveLesson, putBackLesson, takeOutLesson } from '#server/use-cases/workroom/change-lessons.ts';
 import { createSeries } from '#server/use-cases/workroom/create-series.ts';
+import { addKeptThing, putBackKeptThing, saveKeptThing, takeOutKeptThing } from '#server/use-cases/workroom/keep-things.ts';
 import { restoreLessonText } from '#server/use-cases/workroom/restore-lesson-text.ts';
 import { saveLessonDraft } from '#server/use-cases/workroom/save-lesson-draft.ts';
 import { saveLessonSettings } from '#server/use-cases/workroom/save-lesson-settings.ts';
@@ -23,6 +24,8 @@ import { formAction } from './form-action.ts';
 const seriesAt = (slug: string, anchor = ''): string => `/workroom/series/${slug}${anchor}`;
 const partAt = ({ series, publicId }: PartPlace, page = ''): string => `${seriesAt(series)}/parts/${publicId}${page}`;
 const listAt = ({ part, publicId }: LinePlace, at = 'line'): string => `${partAt(part, '/gather')}#${at}-${publicId}`;
+const THINGS = '/workroom/things';
+const thingAt = ({ publicId }: { publicId: string }): string => `${THINGS}#thing-${publicId}`;
 const savedNow = (ctx: Context): string => `Saved ${clockWords(ctx.clock.now(), signedIn(ctx).timeZone)}`;
 
 export const workroom = {
@@ -92,6 +95,24 @@ export const workroom = {
   }),
   takeOutLine: formAction(GatheringItemForm, async ({ item }, ctx) => {
     const line = await takeOutGatheringItem(ctx, item);
-    return { to: partAt(line.part, '/gather'), said: `${line.name} taken out.` };
+    return { to: `${partAt(line.part, '/gather')}?out=${line.publicId}#list-title` };
+  }),
+  putBackLine: formAction(GatheringItemForm, async ({ item }, ctx) => {
+    const line = await putBackGatheringItem(ctx, item);
+    return { to: listAt(line), said: `${line.name} is back on the list.` };
+  }),
+
+  keepThing: formAction(NewKeptThingForm, async (input, ctx) => {
+    const thing = await addKeptThing(ctx, input);
+    return { to: thingAt(thing), said: `${thing.name} is kept for your lists.` };
+  }),
+  saveThing: formAction(KeptThingForm, async (input, ctx) => ({ to: thingAt(await saveKeptThing(ctx, input)), said: savedNow(ctx) })),
+  takeOutThing: formAction(KeptThingItemForm, async ({ thing: publicId }, ctx) => {
+    const { name } = await takeOutKeptThing(ctx, publicId);
+    return { to: THINGS, said: `${name} taken out. Lists keep their lines of it, and it can be put back below.` };
+  }),
+  putBackThing: formAction(KeptThingItemForm, async ({ thing: publicId }, ctx) => {
+    const thing = await putBackKeptThing(ctx, publicId);
+    return { to: thingAt(thing), said: `${thing.name} is back among your things.` };
   }),
 };

@@ -27,6 +27,8 @@ export const GatheringEntry = z.object({
   standIn: words(200).optional(),
   untilPart: part.optional(),
   note: words(300).optional(),
+  lookOut: words(300).optional(),
+  getFrom: words(200).optional(),
 }).strict();
 
 export type GatheringEntry = z.output<typeof GatheringEntry>;

@@ -100,19 +100,36 @@ export const MoveLessonForm = z.object({
 }).refine(({ by, to }) => by !== undefined || to !== undefined, { path: ['to'], message: 'Say which number the part shall have.' });
 export type MoveLessonInput = z.output<typeof MoveLessonForm>;
 
-const gatheringFields = {
+const thingFields = {
   kind: z.enum(['tool', 'yarn', 'material']),
   name: words('The name', 120),
+  lookOut: maybeWords(300),
+  getFrom: maybeWords(200),
+  standIn: maybeWords(200),
+};
+const gatheringFields = {
+  ...thingFields,
   amountKey: maybeWords(80),
   amountText: maybeWords(80),
-  standIn: maybeWords(200),
   untilPart: z.string().trim().optional().transform((text) => (text === undefined || text === '' ? null : Number(text)))
     .refine((part) => part === null || (Number.isInteger(part) && part >= 1 && part <= 99), 'Write the number of a part, or leave it empty.'),
   note: maybeWords(300),
+  /** Its words are kept for other lists too. */
+  keep: ticked,
 };
 export const NewGatheringForm = z.object({ lesson: publicId, ...gatheringFields });
 export type NewGatheringInput = z.output<typeof NewGatheringForm>;
 export const GatheringForm = z.object({ item: publicId, ...gatheringFields });
 export type GatheringInput = z.output<typeof GatheringForm>;
 export const GatheringItemForm = z.object({ item: publicId });
+export const NewKeptThingForm = z.object(thingFields);
+export type NewKeptThingInput = z.output<typeof NewKeptThingForm>;
+export const KeptThingForm = z.object({ thing: publicId, ...thingFields });
+export type KeptThingInput = z.output<typeof KeptThingForm>;
+/** A thing as it is kept for all lists. */
+export interface ThingKept extends NewKeptThingInput {
+  readonly publicId: string;
+}
+export const KeptThingItemForm = z.object({ thing: publicId });
+
 export const MoveGatheringForm = z.object({ item: publicId, by: z.enum(['up', 'down']) });

@@ -59,6 +59,8 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/series/[slug]/parts/[part]/versions': [['ilse', ofPart('/versions')]],
   '/workroom/series/[slug]/parts/[part]/video': [['ilse', ofPart('/video')]],
   '/workroom/series/[slug]/videos/[name]': [['ilse', '/workroom/series/low-tide/videos/dress-the-loom']],
+  '/workroom/things': [['ilse', '/workroom/things']],
+  '/workroom/series/[slug]/lists': [['ilse', '/workroom/series/low-tide/lists']],
   '/workroom/students': [['ilse', '/workroom/students']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
 };

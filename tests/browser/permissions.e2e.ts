@@ -117,6 +117,8 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/series/[slug]/parts/[part]/versions': [{ at: ofPart('/versions'), answers: OWNER }],
   '/workroom/series/[slug]/parts/[part]/video': [{ at: ofPart('/video'), answers: OWNER }],
   '/workroom/series/[slug]/videos/[name]': [{ at: '/workroom/series/low-tide/videos/dress-the-loom', answers: OWNER }, { at: '/workroom/series/low-tide/videos/nothing', answers: '303 403 403 404 404 403 403' }],
+  '/workroom/things': [{ at: '/workroom/things', answers: TEACHERS }],
+  '/workroom/series/[slug]/lists': [{ at: '/workroom/series/low-tide/lists', answers: OWNER }],
   '/workroom/students': [{ at: '/workroom/students', answers: TEACHERS }],
 };
 

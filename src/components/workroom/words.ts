@@ -1,5 +1,5 @@
 /** What the workroom calls things that the database has short names for. */
-import type { MissingPlace } from '#core/series/missing.ts';
+import type { Missing, MissingPlace } from '#core/series/missing.ts';
 import type { DeskPart, SeriesDesk, TextState } from '#server/queries/workroom/series-desk.ts';
 
 export const LEVEL_OPTIONS = [
@@ -17,10 +17,11 @@ export const TEXT_WORDS: Readonly<Record<TextState, string>> = {
 
 export const pathOfSeries = (slug: string): string => `/workroom/series/${slug}`;
 export const pathOfPart = (slug: string, part: string, page: '' | '/settings' | '/gather' | '/video' | '/preview' | '/versions' = ''): string => `${pathOfSeries(slug)}/parts/${part}${page}`;
+export const pathOfLine = (slug: string, part: string, line: string): string => `${pathOfPart(slug, part, '/gather')}#line-${line}`;
 export const pathOfVideo = (slug: string, name: string): string => `${pathOfSeries(slug)}/videos/${name}`;
 
 /** Where a missing thing is mended. */
-export function pathOfMissing(slug: string, place: MissingPlace, part: DeskPart | undefined, line?: number): string {
+export function pathOfMissing(slug: string, place: MissingPlace, part: DeskPart | undefined, { line, item }: Pick<Missing, 'line' | 'item'> = {}): string {
   const own = pathOfSeries(slug);
   switch (place) {
     case 'words':
@@ -34,7 +35,7 @@ export function pathOfMissing(slug: string, place: MissingPlace, part: DeskPart 
     case 'text':
       return part === undefined ? `${own}#parts` : `${pathOfPart(slug, part.publicId)}${line === undefined ? '' : `?line=${line}`}#write`;
     case 'list':
-      return part === undefined ? `${own}#parts` : pathOfPart(slug, part.publicId, '/gather');
+      return part === undefined ? `${own}#parts` : item === undefined ? pathOfPart(slug, part.publicId, '/gather') : pathOfLine(slug, part.publicId, item);
     case 'settings':
       return part === undefined ? `${own}#parts` : `${pathOfPart(slug, part.publicId, '/settings')}#opens`;
   }

@@ -11,6 +11,8 @@ export interface GatheringLine {
   readonly standIn: string | null;
   readonly untilPart: number | null;
   readonly note: string | null;
+  readonly lookOut: string | null;
+  readonly getFrom: string | null;
   readonly ticked: boolean;
 }
 
@@ -37,6 +39,8 @@ export function mergeLines(lines: readonly GatheringLine[]): MergedLine[] {
       amountText: before.amountText ?? line.amountText,
       standIn: before.standIn ?? line.standIn,
       note: before.note ?? line.note,
+      lookOut: before.lookOut ?? line.lookOut,
+      getFrom: before.getFrom ?? line.getFrom,
       untilPart: before.untilPart === null || line.untilPart === null ? (before.untilPart ?? line.untilPart) : Math.max(before.untilPart, line.untilPart),
       ticked: before.ticked || line.ticked,
       publicIds: [...before.publicIds, publicId],

@@ -22,6 +22,8 @@ export interface ShownLine {
   readonly when: string;
   readonly note: string;
   readonly standIn: string;
+  readonly lookOut: string;
+  readonly getFrom: string;
 }
 
 export interface ShownFor {
@@ -103,8 +105,13 @@ function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
     also: line.kind === 'yarn' ? weightWords(line, material, units) : '',
     when: partsWords(line.parts, line.untilPart),
     note: line.note ?? '',
-    standIn: isOwnYarn(yarn, patternYarn) ? '' : (line.standIn ?? ''),
+    ...wordsFor(line, isOwnYarn(yarn, patternYarn)),
   };
+}
+
+/** Of a yarn she has already nobody need tell her where to get another, or what could stand in for it. */
+function wordsFor({ standIn, lookOut, getFrom }: MergedLine, hasOwn: boolean): Pick<ShownLine, 'standIn' | 'lookOut' | 'getFrom'> {
+  return hasOwn ? { standIn: '', lookOut: '', getFrom: '' } : { standIn: standIn ?? '', lookOut: lookOut ?? '', getFrom: getFrom ?? '' };
 }
 
 const isOwnYarn = (yarn: Yarn | undefined, pattern: Yarn | undefined): boolean => yarn !== undefined && pattern !== undefined && yarn !== pattern && yarn.label !== pattern.label;

@@ -2,7 +2,7 @@
  * What a series still lacks before students may come in. Pure: it is handed what there is, and says what is not,
  * in the order in which a teacher would mend it.
  */
-import { contradictions } from '#core/gathering/contradictions.ts';
+import { contradictions, type ListedLine } from '#core/gathering/contradictions.ts';
 import { listed } from '#core/listed.ts';
 import { openingFaults, type PartOpening } from '#core/series/opening-faults.ts';
 
@@ -22,11 +22,7 @@ export interface TextRemark {
   readonly reason: string;
 }
 
-export interface ListedThing {
-  readonly kind: 'tool' | 'yarn' | 'material';
-  readonly name: string;
-  /** Null where an amount of the plan, or none, is given. */
-  readonly amountText: string | null;
+export interface ListedThing extends Omit<ListedLine, 'part'> {
   readonly hasAmount: boolean;
 }
 
@@ -67,6 +63,8 @@ export interface Missing {
   readonly place: MissingPlace;
   /** Line of the part's text, where it is about one. */
   readonly line?: number;
+  /** Public id of the line of its gathering list, where it is about one. */
+  readonly item?: string;
   readonly says: string;
   /** True: it cannot be published so. False: worth a look. */
   readonly blocks: boolean;
@@ -118,8 +116,7 @@ function worthALook({ story, techniques, parts }: SeriesInHand): Missing[] {
     ...(parts.every(({ list }) => list.length === 0) ? [noticed(null, 'parts', 'No part has a gathering list, so nobody knows before paying what she needs.')] : []),
     ...(parts.every(({ isPreview }) => !isPreview) ? [noticed(null, 'parts', 'No part is free to read. One that is lets people see how you teach.')] : []),
     ...(parts.every(({ hasCheckpoint }) => !hasCheckpoint) ? [noticed(null, 'parts', 'No part asks for a photo, so you see no loom before it is too late to mend.')] : []),
-    ...contradictions(parts.flatMap(({ number, list }) => list.filter(({ kind }) => kind === 'tool').map(({ name, amountText }) => ({ part: number, name, amountText }))))
-      .map(({ part, says }) => noticed(part, 'list', says)),
+    ...contradictions(parts.flatMap(({ number, list }) => list.map((line) => ({ ...line, part: number }))), parts.length).map(({ part, line, says }) => ({ ...noticed(part, 'list', says), item: line })),
     ...parts.flatMap(lookAtPart),
     ...parts.flatMap(({ number, isEmpty, textProblems, textWarnings, stepCount }) => [
       ...textWarnings.map(({ line, reason }) => ({ ...noticed(number, 'text', `Line ${line}: ${reason}`), line })),
@@ -131,7 +128,7 @@ function worthALook({ story, techniques, parts }: SeriesInHand): Missing[] {
 function lookAtPart({ number, list, hasCaution, saysWhatToLookFor, isEmpty, textProblems }: PartInHand): Missing[] {
   const sharp = list.filter(({ name }) => CAN_HURT.test(name)).map(({ name }) => `“${name}”`);
   return [
-    ...list.filter(({ hasAmount }) => !hasAmount).map(({ name }) => noticed(number, 'list', `“${name}” has no amount, so nobody knows how much to bring.`)),
+    ...list.filter(({ hasAmount }) => !hasAmount).map(({ name, publicId }) => ({ ...noticed(number, 'list', `“${name}” has no amount, so nobody knows how much to bring.`), item: publicId })),
     ...(sharp.length > 0 && !hasCaution && !isEmpty && textProblems.length === 0 ? [noticed(number, 'text', `${listed(sharp)} can hurt, and no caution stands in the text.`)] : []),
     ...(saysWhatToLookFor ? [] : [noticed(number, 'settings', 'It asks for a photo and does not say what you look for in it.')]),
   ];

@@ -57,10 +57,11 @@ function muchOf({ amount }: ShownLine) {
   return typeof amount === 'string' ? amount : <Parts parts={amount} />;
 }
 
-function moreOf({ when, note, standIn }: ShownLine) {
+function moreOf({ when, note, standIn, lookOut, getFrom }: ShownLine) {
   return (
     <>
       <span className="gather-when">{when}.</span> {note !== '' && <span className="gather-note">{note}</span>}
+      {lookOut !== '' && <span className="gather-note"><b>Look out for:</b> {lookOut}</span>} {getFrom !== '' && <span className="gather-or"><b>From:</b> {getFrom}</span>}
       {standIn !== '' && <span className="gather-or"><b>Or:</b> {standIn.charAt(0).toLowerCase()}{standIn.slice(1)}</span>}
     </>
   );

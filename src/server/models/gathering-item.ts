@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { count, id, maybeRef, maybeText, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
+import { count, id, maybeMoment, maybeRef, maybeText, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /** A line of a lesson's gathering list. `amountKey` names a number of the plan; `amountText` is for what no plan gives. */
@@ -15,6 +15,9 @@ export class GatheringItem extends Model<InferAttributes<GatheringItem>, InferCr
   declare standIn: CreationOptional<string | null>;
   declare untilPart: CreationOptional<number | null>;
   declare note: CreationOptional<string | null>;
+  declare lookOut: CreationOptional<string | null>;
+  declare getFrom: CreationOptional<string | null>;
+  declare takenOutAt: CreationOptional<Date | null>;
   declare createdAt: CreationOptional<Date>;
   declare updatedAt: CreationOptional<Date>;
 }
@@ -31,6 +34,9 @@ GatheringItem.init({
   standIn: maybeText(200),
   untilPart: maybeRef(),
   note: maybeText(300),
+  lookOut: maybeText(300),
+  getFrom: maybeText(200),
+  takenOutAt: maybeMoment(),
   createdAt: moment(),
   updatedAt: moment(),
 }, { sequelize, tableName: 'gathering_items' });

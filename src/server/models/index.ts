@@ -5,6 +5,7 @@ export { EmailToken } from './email-token.ts';
 export { Enrolment } from './enrolment.ts';
 export { GatheringItem } from './gathering-item.ts';
 export { Job } from './job.ts';
+export { KeptThing } from './kept-thing.ts';
 export { LedgerEntry } from './ledger-entry.ts';
 export { Lesson } from './lesson.ts';
 export { LessonVersion } from './lesson-version.ts';

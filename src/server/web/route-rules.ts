@@ -76,6 +76,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/series/bring-in': 'teacher',
   '/workroom/series/[slug]': 'teacher',
   '/workroom/series/[slug]/before': 'teacher',
+  '/workroom/things': 'teacher',
+  '/workroom/series/[slug]/lists': 'teacher',
   '/workroom/series/[slug]/timetable': 'teacher',
   '/workroom/series/[slug]/piece': 'teacher',
   '/workroom/series/[slug]/folder': 'teacher',

@@ -6,7 +6,7 @@ import type { ShownLine } from '#core/gathering/rows.ts';
 import { GatherPart } from '#islands/gather/GatherPart.tsx';
 
 function line(key: string, given: Partial<ShownLine> = {}): ShownLine {
-  return { key, items: key.split('.'), kind: 'tool', name: `Thing ${key}`, ticked: false, colour: undefined, amount: '1', also: '', when: 'Part 2', note: '', standIn: '', ...given };
+  return { key, items: key.split('.'), kind: 'tool', name: `Thing ${key}`, ticked: false, colour: undefined, amount: '1', also: '', when: 'Part 2', note: '', standIn: '', lookOut: '', getFrom: '', ...given };
 }
 const lines = [line('a.b', { name: 'Blunt needle' }), line('c', { name: 'Fork', ticked: true })];
 let seat = 0;

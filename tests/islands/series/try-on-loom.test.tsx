@@ -152,8 +152,8 @@ describe('without script', () => {
 
 describe('what to gather', () => {
   const lines = [
-    { publicIds: ['a'], parts: [1], kind: 'tool', name: 'Shed stick', amountKey: 'wound-width', amountText: null, standIn: 'A ruler', untilPart: null, note: null, ticked: false },
-    { publicIds: ['b'], parts: [1], kind: 'material', name: 'Corks', amountKey: null, amountText: '4', standIn: null, untilPart: null, note: null, ticked: false },
+    { publicIds: ['a'], parts: [1], kind: 'tool', name: 'Shed stick', amountKey: 'wound-width', amountText: null, standIn: 'A ruler', untilPart: null, note: null, lookOut: null, getFrom: null, ticked: false },
+    { publicIds: ['b'], parts: [1], kind: 'material', name: 'Corks', amountKey: null, amountText: '4', standIn: null, untilPart: null, note: null, lookOut: null, getFrom: null, ticked: false },
   ] as const;
 
   it('is for the pattern until a loom is tried, then for that loom', async () => {

@@ -20,8 +20,8 @@ const COLUMNS = [
   },
   {
     model: GatheringItem,
-    taken: ['position', 'kind', 'name', 'amountKey', 'amountText', 'standIn', 'untilPart', 'note'],
-    left: { id: OF_THE_HOUSE, publicId: OF_THE_HOUSE, lessonId: OF_THE_HOUSE },
+    taken: ['position', 'kind', 'name', 'amountKey', 'amountText', 'standIn', 'untilPart', 'note', 'lookOut', 'getFrom'],
+    left: { id: OF_THE_HOUSE, publicId: OF_THE_HOUSE, lessonId: OF_THE_HOUSE, takenOutAt: 'lines that were taken out stay' },
   },
   { model: PatternPiece, taken: ['data'], left: { seriesId: OF_THE_HOUSE, revision: COUNTED } },
   { model: SeriesMedia, taken: ['name', 'title', 'lessonId'], left: { seriesId: OF_THE_HOUSE, mediaId: PUBLISHED, draftMediaId: OF_THE_HOUSE } },

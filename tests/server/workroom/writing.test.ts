@@ -212,8 +212,8 @@ describe('settings of a part', () => {
 });
 
 describe('a gathering list', () => {
-  const line = { kind: 'tool', name: 'Comb', amountKey: null, amountText: null, standIn: null, untilPart: null, note: null } as const;
-  const names = async (): Promise<string[]> => (await GatheringItem.findAll({ where: { lessonId: first.id }, order: ['position'] })).map(({ name }) => name);
+  const line = { kind: 'tool', name: 'Comb', amountKey: null, amountText: null, standIn: null, untilPart: null, note: null, lookOut: null, getFrom: null, keep: false } as const;
+  const names = async (): Promise<string[]> => (await GatheringItem.findAll({ where: { lessonId: first.id, takenOutAt: null }, order: ['position'] })).map(({ name }) => name);
 
   test('takes lines, changes, moves and takes them out', async () => {
     const comb = await addGatheringItem(ctx, { lesson: first.publicId, ...line });
@@ -264,7 +264,7 @@ describe('another’s series', () => {
       for (const act of [
         () => saveLessonDraft(foreign, { lesson: first.publicId, revision: 0, source: 'Mine.' }),
         () => saveLessonSettings(foreign, settings),
-        () => addGatheringItem(foreign, { lesson: first.publicId, kind: 'tool', name: 'Comb', amountKey: null, amountText: null, standIn: null, untilPart: null, note: null }),
+        () => addGatheringItem(foreign, { lesson: first.publicId, kind: 'tool', name: 'Comb', amountKey: null, amountText: null, standIn: null, untilPart: null, note: null, lookOut: null, getFrom: null, keep: false }),
         () => publishSeries(foreign, series.slug),
         () => takeBackSeries(foreign, series.slug),
       ]) await expect(act()).rejects.toMatchObject({ code: 'NOT_FOUND' });

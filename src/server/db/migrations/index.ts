@@ -14,6 +14,7 @@ import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 import { createCalendars } from './0012-create-calendars.ts';
 import { createPieceDrafts } from './0013-create-piece-drafts.ts';
 import { createNotices } from './0016-create-notices.ts';
+import { createKeptThings } from './0020-create-kept-things.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -30,4 +31,5 @@ export const migrations: readonly Migration[] = [
   createCalendars,
   createPieceDrafts,
   createNotices,
+  createKeptThings,
 ];

@@ -13,10 +13,10 @@ export async function gatheringLines(parts: readonly { readonly id: number; read
   if (parts.length === 0) return [];
   const rows = await sequelize.query<Row>(
     `SELECT g.public_id AS publicId, g.lesson_id AS lessonId, g.kind, g.name, g.amount_key AS amountKey, g.amount_text AS amountText,
-            g.stand_in AS standIn, g.until_part AS untilPart, g.note, COALESCE(t.is_ticked, 0) AS ticked
+            g.stand_in AS standIn, g.until_part AS untilPart, g.note, g.look_out AS lookOut, g.get_from AS getFrom, COALESCE(t.is_ticked, 0) AS ticked
        FROM gathering_items g
        LEFT JOIN ticks t ON t.enrolment_id = :enrolmentId AND t.subject = 'gather' AND t.item_key = g.public_id
-      WHERE g.lesson_id IN (:lessonIds)
+      WHERE g.lesson_id IN (:lessonIds) AND g.taken_out_at IS NULL
       ORDER BY g.position, g.id`,
     { replacements: { lessonIds: parts.map(({ id }) => id), enrolmentId: enrolmentId ?? 0 }, type: QueryTypes.SELECT },
   );

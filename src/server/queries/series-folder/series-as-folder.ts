@@ -17,7 +17,7 @@ export interface FolderFile {
 export async function seriesAsFolder(series: Series, { withFilms }: { readonly withFilms: boolean }): Promise<FolderFile[]> {
   const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'] });
   const [items, piece, media] = await Promise.all([
-    GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) }, order: ['position', 'id'] }),
+    GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id), takenOutAt: null }, order: ['position', 'id'] }),
     PatternPiece.findByPk(series.id),
     mediaFiles(series.id, lessons, withFilms),
   ]);
@@ -60,7 +60,7 @@ function opensIn(rule: OpeningRule, lessons: readonly Lesson[]): WrittenSeriesFi
   return { rule: 'after-verdict', ...(index >= 0 && { part: index + 1 }) };
 }
 
-function gatheringEntry({ kind, name, amountKey, amountText, standIn, untilPart, note }: GatheringItem): GatheringEntry {
+function gatheringEntry({ kind, name, amountKey, amountText, standIn, untilPart, note, lookOut, getFrom }: GatheringItem): GatheringEntry {
   return {
     kind,
     name,
@@ -69,6 +69,8 @@ function gatheringEntry({ kind, name, amountKey, amountText, standIn, untilPart,
     ...(standIn !== null && { standIn }),
     ...(untilPart !== null && { untilPart }),
     ...(note !== null && { note }),
+    ...(lookOut !== null && { lookOut }),
+    ...(getFrom !== null && { getFrom }),
   };
 }
 

@@ -16,6 +16,13 @@ export interface Draft {
   readonly text: LessonText | RefusedText;
   /** Its gathering list, in order. */
   readonly list: readonly GatheringItem[];
+  /** Lines that were taken off it. */
+  readonly linesOut: readonly GatheringItem[];
+}
+
+/** Lines of one part, those on its list apart from those taken off it. */
+export function listsOf(lines: readonly GatheringItem[]): Pick<Draft, 'list' | 'linesOut'> {
+  return { list: lines.filter(({ takenOutAt }) => takenOutAt === null), linesOut: lines.filter(({ takenOutAt }) => takenOutAt !== null) };
 }
 
 /** What was read for it comes along, so that a page asks for none of it twice. */
@@ -35,7 +42,7 @@ export async function seriesInHand(series: Series): Promise<SeriesRead> {
     mediaOnDesk(series.id),
   ]);
   const items = lessons.length === 0 ? [] : await GatheringItem.findAll({ where: { lessonId: lessons.map(({ id }) => id) }, order: ['position', 'id'] });
-  const drafts = lessons.map((lesson): Draft => ({ lesson, text: lesson.draftReading, list: items.filter(({ lessonId }) => lessonId === lesson.id) }));
+  const drafts = lessons.map((lesson): Draft => ({ lesson, text: lesson.draftReading, ...listsOf(items.filter(({ lessonId }) => lessonId === lesson.id)) }));
   const pattern = described === null ? null : { piece: described.data, planned: planPiece(described.data) };
   // While no plan can be reckoned, that is what is missing, not each amount.
   const isUnknown = (key: string): boolean => pattern?.planned.ok === true && !amountOf(key, pattern.piece, pattern.planned.value).ok;
@@ -46,7 +53,7 @@ export async function seriesInHand(series: Series): Promise<SeriesRead> {
       title: lesson.title,
       isPreview: lesson.isPreview,
       isEmpty: lesson.draftSource.trim() === '',
-      list: list.map(({ kind, name, amountKey, amountText }) => ({ kind, name, amountText, hasAmount: amountKey !== null || amountText !== null })),
+      list: list.map(({ publicId, kind, name, amountKey, amountText, untilPart }) => ({ publicId, kind, name, amountText, untilPart, hasAmount: amountKey !== null || amountText !== null })),
       saysWhatToLookFor: lesson.checkpoint === null || lesson.checkpoint.look.length > 0,
       unknownListAmounts: [...new Set(list.flatMap(({ amountKey }) => (amountKey !== null && isUnknown(amountKey) ? [amountKey] : [])))],
       ...factsOfText(text, media, isUnknown),

@@ -11,7 +11,7 @@ import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { GatheringItem, Lesson, LessonVersion, Series, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
-import { seriesInHand } from '#server/queries/series/series-in-hand.ts';
+import { listsOf, seriesInHand } from '#server/queries/series/series-in-hand.ts';
 
 export interface PartOfSeries {
   readonly id: number;
@@ -31,6 +31,8 @@ export interface ListLine {
   readonly standIn: string | null;
   readonly untilPart: number | null;
   readonly note: string | null;
+  readonly lookOut: string | null;
+  readonly getFrom: string | null;
 }
 
 export interface SeatChoice {
@@ -60,6 +62,8 @@ export interface LessonDesk {
   readonly mayGoOut: PartMayGoOut | null;
   /** Its gathering list, in order. */
   readonly list: readonly ListLine[];
+  /** Lines taken off it, newest first. */
+  readonly linesOut: readonly { readonly publicId: string; readonly name: string; readonly takenOutAt: Date }[];
   readonly pattern: Piece | null;
   readonly media: readonly SeriesMediaFile[];
   /** People inside, by name; the first hundred. */
@@ -80,10 +84,10 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
   const at = drafts.findIndex((draft) => draft.lesson.publicId === publicId);
   const lesson = drafts[at]?.lesson ?? (await Lesson.findOne({ where: { publicId, seriesId: series.id } }));
   if (lesson === null) return null;
-  const [workroom, version, list, seats] = await Promise.all([
+  const [workroom, version, { list, linesOut }, seats] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
     lesson.publishedVersionId === null ? null : LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['number', 'source', 'createdAt'] }),
-    drafts[at]?.list ?? GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }),
+    drafts[at] ?? GatheringItem.findAll({ where: { lessonId: lesson.id }, order: ['position', 'id'] }).then(listsOf),
     sequelize.query<SeatChoice>(SEATS, { replacements: [series.id], type: QueryTypes.SELECT }),
   ]);
   const parts = drafts.map(({ lesson: part }, index) => ({ id: part.id, publicId: part.publicId, number: index + 1, title: part.title, asksForPhoto: part.checkpoint !== null, opens: part.opens }));
@@ -99,9 +103,14 @@ export async function lessonDesk(actor: Actor, slug: string, publicId: string): 
     publicId, title, minutes, isPreview, opens, checkpoint,
     draft: { source: draftSource, revision: draftRevision, reading: draftReading },
     published: version === null ? null : { number: version.number, at: version.createdAt, source: version.source },
-    list: list.map(({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note }) => ({ publicId: line, kind, name, amountKey, amountText, standIn, untilPart, note })),
+    list: list.map(shownLine),
+    linesOut: linesOut.flatMap(({ publicId: line, name, takenOutAt }) => (takenOutAt === null ? [] : [{ publicId: line, name, takenOutAt }])).toSorted((a, b) => b.takenOutAt.getTime() - a.takenOutAt.getTime()),
     pattern: pattern?.piece ?? null,
     media,
     seats,
   };
+}
+
+function shownLine({ publicId, kind, name, amountKey, amountText, standIn, untilPart, note, lookOut, getFrom }: GatheringItem): ListLine {
+  return { publicId, kind, name, amountKey, amountText, standIn, untilPart, note, lookOut, getFrom };
 }

@@ -68,7 +68,7 @@ interface PartRow {
 const PARTS = `
   SELECT l.public_id AS publicId, l.position, l.title, l.minutes, l.is_preview AS isPreview, l.opens, l.checkpoint,
          TRIM(l.draft_source) = '' AS isEmpty, v.created_at AS publishedAt, BINARY v.source = BINARY l.draft_source AS isSame, l.taken_out_at AS takenOutAt,
-         (SELECT COUNT(*) FROM gathering_items g WHERE g.lesson_id = l.id) AS lineCount,
+         (SELECT COUNT(*) FROM gathering_items g WHERE g.lesson_id = l.id AND g.taken_out_at IS NULL) AS lineCount,
          EXISTS (SELECT 1 FROM series_media m LEFT JOIN media d ON d.id = m.draft_media_id LEFT JOIN media p ON p.id = m.media_id
                   WHERE m.series_id = l.series_id AND (d.state = 'ready' OR p.draft_detail IS NOT NULL)
                     AND JSON_CONTAINS(JSON_EXTRACT(l.draft_reading, '$.media[*].name'), JSON_QUOTE(m.name))) AS hasNewMedia

@@ -24,6 +24,6 @@ export async function writeTicks(enrolmentId: number, ticks: readonly TickToWrit
 
 /** Throws NOT_FOUND unless all things stand on lists of this series. */
 export async function requireItemsOf(series: SeriesFor, items: readonly string[]): Promise<void> {
-  const rows = await GatheringItem.findAll({ where: { publicId: [...items] } });
+  const rows = await GatheringItem.findAll({ where: { publicId: [...items], takenOutAt: null } });
   authorize(rows.length === new Set(items).size && rows.every(({ lessonId }) => series.parts.some(({ id }) => id === lessonId)));
 }

@@ -51,6 +51,8 @@ async function writeLessons(seriesId: number, { file, texts }: CheckedFolder): P
       standIn: item.standIn ?? null,
       untilPart: item.untilPart ?? null,
       note: item.note ?? null,
+      lookOut: item.lookOut ?? null,
+      getFrom: item.getFrom ?? null,
     })));
   }
   return lessons;

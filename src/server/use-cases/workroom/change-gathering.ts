@@ -6,9 +6,11 @@ import type { Context } from '#server/context.ts';
 import { AppError, fieldError } from '#server/errors.ts';
 import { GatheringItem, PatternPiece, type Lesson, type Series } from '#server/models/index.ts';
 import { placeOf, type PartPlace } from './_part-place.ts';
+import { keepThing, wordsOf } from './_keep-thing.ts';
 import { ownGatheringItem, ownLesson, withSeriesLocked } from './_own-series.ts';
 
 const MOST_LINES = 60;
+const listIsFull = (): AppError => new AppError('CONFLICT', { says: `A list holds at most ${MOST_LINES} lines.` });
 
 /** Where a line stands after a change. */
 export interface LinePlace {
@@ -22,30 +24,45 @@ export interface LinePlace {
 const lineAt = (series: Series, lesson: Lesson, { publicId, name }: GatheringItem, number: number): LinePlace => ({ part: placeOf(series, lesson), publicId, name, number });
 
 /** Puts a line at the end of a part's list. */
-export async function addGatheringItem(ctx: Context, { lesson: publicId, ...line }: NewGatheringInput): Promise<LinePlace> {
+export async function addGatheringItem(ctx: Context, { lesson: publicId, keep, ...line }: NewGatheringInput): Promise<LinePlace> {
   const { lesson, series } = await ownLesson(ctx, publicId);
   await requireKnownAmount(series.id, line.amountKey);
   return withSeriesLocked(series, async () => {
-    const position = (await GatheringItem.count({ where: { lessonId: lesson.id } })) + 1;
-    if (position > MOST_LINES) throw new AppError('CONFLICT', { says: `A list holds at most ${MOST_LINES} lines.` });
+    const position = (await linesOf(lesson.id)).length + 1;
+    if (position > MOST_LINES) throw listIsFull();
+    if (keep) await keepThing(series.workroomId, wordsOf(line));
     return lineAt(series, lesson, await GatheringItem.create({ lessonId: lesson.id, position, ...line }), position);
   });
 }
 
-export async function saveGatheringItem(ctx: Context, { item: publicId, ...line }: GatheringInput): Promise<LinePlace> {
+export async function saveGatheringItem(ctx: Context, { item: publicId, keep, ...line }: GatheringInput): Promise<LinePlace> {
   const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
   await requireKnownAmount(series.id, line.amountKey);
   return withSeriesLocked(series, async () => {
     await item.update(line);
+    if (keep) await keepThing(series.workroomId, wordsOf(line));
     return lineAt(series, lesson, item, item.position);
   });
 }
 
+/** The line leaves everybody's list; put back, it has the ticks it had. */
 export async function takeOutGatheringItem(ctx: Context, publicId: string): Promise<LinePlace> {
   const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
   return withSeriesLocked(series, async () => {
-    await item.destroy();
+    await item.update({ takenOutAt: ctx.clock.now() });
     await number(await linesOf(lesson.id));
+    return lineAt(series, lesson, item, item.position);
+  });
+}
+
+/** Puts a line that was taken out back where it stood, or as near as there is room. */
+export async function putBackGatheringItem(ctx: Context, publicId: string): Promise<LinePlace> {
+  const { item, lesson, series } = await ownGatheringItem(ctx, publicId);
+  return withSeriesLocked(series, async () => {
+    const others = (await linesOf(lesson.id)).filter(({ id }) => id !== item.id);
+    if (others.length >= MOST_LINES) throw listIsFull();
+    await item.update({ takenOutAt: null });
+    await number(others.toSpliced(item.position - 1, 0, item));
     return lineAt(series, lesson, item, item.position);
   });
 }
@@ -56,6 +73,7 @@ export async function moveGatheringItem(ctx: Context, publicId: string, by: 'up'
   return withSeriesLocked(series, async () => {
     const lines = await linesOf(lesson.id);
     const from = lines.findIndex(({ id }) => id === item.id);
+    if (from < 0) throw new AppError('CONFLICT', { says: 'This line was taken out. Put it back first.' });
     const to = Math.min(Math.max(0, from + (by === 'up' ? -1 : 1)), lines.length - 1);
     await number(lines.filter(({ id }) => id !== item.id).toSpliced(to, 0, ...lines.slice(from, from + 1)));
     return lineAt(series, lesson, item, to + 1);
@@ -63,7 +81,7 @@ export async function moveGatheringItem(ctx: Context, publicId: string, by: 'up'
 }
 
 function linesOf(lessonId: number): Promise<GatheringItem[]> {
-  return GatheringItem.findAll({ where: { lessonId }, order: ['position', 'id'] });
+  return GatheringItem.findAll({ where: { lessonId, takenOutAt: null }, order: ['position', 'id'] });
 }
 
 async function number(lines: readonly GatheringItem[]): Promise<void> {

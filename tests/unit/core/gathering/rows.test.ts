@@ -9,7 +9,7 @@ const shownFor = (mine = {}): ShownFor => ({ made: madeFor(pattern, mine, 'cm'),
 let count = 0;
 function line(part: number, given: Partial<GatheringLine>): GatheringLine {
   count += 1;
-  return { publicId: `id${count}`, part, kind: 'tool', name: 'Blunt needle', amountKey: null, amountText: '1', standIn: null, untilPart: null, note: null, ticked: false, ...given };
+  return { publicId: `id${count}`, part, kind: 'tool', name: 'Blunt needle', amountKey: null, amountText: '1', standIn: null, untilPart: null, note: null, lookOut: null, getFrom: null, ticked: false, ...given };
 }
 const estuary = { kind: 'yarn', name: 'Fenwool 6/2, Estuary', amountText: null } as const;
 const textOf = (amount: unknown): string => (Array.isArray(amount) ? amount.map(({ text }: { text: string }) => text).join('') : String(amount));
@@ -33,6 +33,16 @@ describe('the list of a whole series', () => {
     const mine = { yarns: { shore: { label: 'Attic blue', tex: 300 } } };
     const [row] = gatherRows([line(1, { ...estuary, amountKey: 'yarn.shore', standIn: 'Any dark yarn' })], shownFor(mine));
     expect(row).toMatchObject({ name: 'Attic blue (for Fenwool 6/2, Estuary)', standIn: '' });
+  });
+
+  test('says by what a good one is known, and where to get it, in the words of the first part that has any', () => {
+    const [row] = gatherRows([line(1, {}), line(2, { lookOut: 'Its eye takes the yarn', getFrom: 'A haberdasher' }), line(3, { lookOut: 'Blunt' })], shownFor());
+    expect(row).toMatchObject({ lookOut: 'Its eye takes the yarn', getFrom: 'A haberdasher' });
+  });
+
+  test('of a yarn she has her own of, nobody is sent to buy another', () => {
+    const [row] = gatherRows([line(1, { ...estuary, amountKey: 'yarn.shore', getFrom: 'A yarn shop', lookOut: 'Two plies' })], shownFor({ yarns: { shore: { label: 'Attic blue', tex: 300 } } }));
+    expect(row).toMatchObject({ lookOut: '', getFrom: '' });
   });
 
   test('without a piece the teacher’s own words are left', () => {
