@@ -7,7 +7,7 @@ import fc from 'fast-check';
 import { cases } from '../support/random-cases.ts';
 
 interface CollectedTest {
-  /** `tests/reference/crimp.test.ts > jamming > ends closer than both yarns together`, with its number. */
+  /** `tests/reference/crimp.test.ts > jamming > ends closer than both yarns together`, numbered from its second case on. */
   readonly id: string;
   readonly run: () => unknown;
 }
@@ -16,6 +16,8 @@ type Body = (...given: unknown[]) => unknown;
 
 export const collected: CollectedTest[] = [];
 let path: readonly string[] = [];
+/** How often each name came: the number is of the name, so that a test added elsewhere leaves what is known of this one. */
+const times = new Map<string, number>();
 
 /** What is defined from now on belongs to this file. */
 export function beginFile(name: string): void {
@@ -30,7 +32,10 @@ function group(name: string, define: () => unknown): void {
 }
 
 function add(name: string, run: () => unknown): void {
-  collected.push({ id: [...path, name, `#${String(collected.length)}`].join(' > '), run });
+  const full = [...path, name].join(' > ');
+  const before = times.get(full) ?? 0;
+  times.set(full, before + 1);
+  collected.push({ id: before === 0 ? full : `${full} #${String(before + 1)}`, run });
 }
 
 const forEach = (define: (name: string, body: () => unknown) => void) => (rows: readonly unknown[]) => (name: string, body: Body): void => {
