@@ -42,7 +42,8 @@ function change(pattern: MacramePiece, { yarns, cords, rod }: MyPiece): MacrameP
 
 function tellChanges(before: Made, after: Made, units: Units): string[] {
   const yarns = Object.entries(after.piece.yarns).flatMap(([role, cord]) => (cord === before.piece.yarns[role] ? [] : [`${cord.label ?? 'Your own cord'} is the ${role} cord.`]));
-  const longer = Math.abs(after.plan.heightMm - before.plan.heightMm) < 1 ? [] : [`The piece comes out ${size(after.plan.heightMm, units)} long instead of ${size(before.plan.heightMm, units)}.`];
+  const [was, is] = [size(before.plan.heightMm, units), size(after.plan.heightMm, units)];
+  const longer = is === was ? [] : [`The piece comes out ${is} long instead of ${was}.`];
   const { rod } = after.piece;
   const hung = rod.diameterMm === before.piece.rod.diameterMm ? [] : [`It hangs from a ${rod.kind} ${amountText(lengthOf(rod.diameterMm, 'fine'), units)} ${rod.kind === 'rod' ? 'thick' : 'wide'}.`];
   return [...yarns, ...hung, ...longer];

@@ -9,6 +9,7 @@ import type { WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 
 /** Less tabby than this says nothing yet of how close its rows lie. */
 export const LEAST_MEASURED_MM = 20;
+const MOST_PICKS_PER_CM = 200;
 
 export const shrinkOf = ({ settings }: PieceOnLoom): number => (1 - settings.relaxation) * (1 - settings.wetShrinkage);
 
@@ -39,6 +40,12 @@ function quicker(beat: RowBeat, times: number, endSpacingMm: number): Beat {
   return beat.picksPerCm === undefined ? { picksPerWeftDiameter: beat.picksPerWeftDiameter * times } : { picksPerCm: beat.picksPerCm * times };
 }
 
+/** No hand beats closer or wider; a count is of rows that were seen, so nothing is too wide. */
+function canBe(beat: Beat): boolean {
+  if (beat.picksPerCm !== undefined) return beat.picksPerCm <= MOST_PICKS_PER_CM;
+  return beat.picksPerWeftDiameter >= BEAT_RANGE.min && beat.picksPerWeftDiameter <= BEAT_RANGE.max;
+}
+
 /**
  * The beat that the woven part shows: as many times closer or wider than the plan's as the tabby came out lower or
  * higher. Undefined where nothing was measured, too little is woven, or what was measured cannot be; the last is told.
@@ -49,10 +56,7 @@ export function measuredBeat(workings: PieceOnLoom, woven: WovenSoFar, findings:
   if (tabbyMm < LEAST_MEASURED_MM) return undefined;
   const measuredMm = woven.heightMm * shrinkOf(workings) - otherMm;
   const beat = measuredMm > 0 ? quicker(workings.laid.beat, tabbyMm / measuredMm, workings.laid.spacingMm) : undefined;
-  const picks = beat?.picksPerCm ?? beat?.picksPerWeftDiameter;
-  const most = beat?.picksPerCm === undefined ? BEAT_RANGE.max : 200;
-  const least = beat?.picksPerCm === undefined ? BEAT_RANGE.min : 0;
-  if (picks !== undefined && picks <= most && picks >= least) return beat;
+  if (beat !== undefined && canBe(beat)) return beat;
   const planned = findings.length((tabbyMm + otherMm) / shrinkOf(workings));
   findings.reject('E_RANGE', '/heightMm', `So many rows cannot be so high: by the plan they come to ${planned} on the loom. Count the rows and measure from the first one to the fell again.`);
   return undefined;

@@ -13,7 +13,7 @@ import { ballsFor } from '#core/craft/purchase.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { below, Findings } from '#core/craft/reading/findings.ts';
 import { present } from '#core/craft/reading/present.ts';
-import { measuredBeat, plannedSoFar, shrinkOf } from '#core/craft/rest/measured-beat.ts';
+import { measuredBeat, shrinkOf } from '#core/craft/rest/measured-beat.ts';
 import { isBegun, readWoven, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import { pickSpacingOn, threadOn } from '#core/craft/techniques/technique.ts';
 import type { Outcome } from '#core/outcome.ts';
@@ -60,8 +60,9 @@ const NO_WARP: WarpPlan = { netMm: 0, withMarginMm: 0, massG: 0 };
 /** A hand's rule tells no less. */
 const SAME_MM = 2;
 
-const rowsIn = (band: Band, heightMm: number, workings: PieceOnLoom): number | undefined =>
-  band.technique === 'tabby' ? picksInHeight(heightMm, pickSpacingOn(workings.laid, band.yarn)) : 'rows' in band ? band.rows : undefined;
+/** None in a band that has no rows to count. */
+const rowsIn = (band: Band, heightMm: number, workings: PieceOnLoom): number =>
+  band.technique === 'tabby' ? picksInHeight(heightMm, pickSpacingOn(workings.laid, band.yarn)) : 'rows' in band ? band.rows : 0;
 
 /** Refuses what the piece does not have: more bands, or rows in a band that has none. */
 function checkPlace({ stacked }: PieceOnLoom, { bandsDone, rows = 0 }: WovenSoFar, findings: Findings): void {
@@ -72,16 +73,16 @@ function checkPlace({ stacked }: PieceOnLoom, { bandsDone, rows = 0 }: WovenSoFa
   const band = stacked[bandsDone]?.band;
   if (rows === 0) return;
   if (band === undefined) findings.reject('E_RANGE', '/rows', 'Every band is finished, so no row is left to count. Leave the rows empty.');
-  else if (band.technique !== 'tabby' && !('rows' in band)) findings.reject('E_RANGE', '/rows', 'This band has no rows to count. Leave them empty, and say that it is finished when it is.');
-  else if (band.technique !== 'tabby' && 'rows' in band && rows > band.rows) findings.reject('E_RANGE', '/rows', `This band has ${String(band.rows)} rows. Between 0 and ${String(band.rows)} works.`);
+  else if (!('rows' in band)) {
+    // However many rows of tabby there are, they are: a band may have grown higher than it was planned.
+    if (band.technique !== 'tabby') findings.reject('E_RANGE', '/rows', 'This band has no rows to count. Leave them empty, and say that it is finished when it is.');
+  } else if (rows > band.rows) findings.reject('E_RANGE', '/rows', `This band has ${String(band.rows)} rows. Between 0 and ${String(band.rows)} works.`);
 }
 
 /** What is left of the band in hand; undefined where that is nothing. */
 function restOfBand(stack: StackedBand, rows: number, workings: PieceOnLoom): StackedBand | undefined {
   const { band } = stack;
-  const all = rowsIn(band, stack.heightMm, workings);
-  if (rows === 0 || all === undefined) return stack;
-  if (rows >= all) return undefined;
+  if (rows > 0 && rows >= rowsIn(band, stack.heightMm, workings)) return undefined;
   if (band.technique === 'tabby') return { ...stack, fromRow: rows };
   return 'rows' in band ? { ...stack, heightMm: stack.heightMm * (1 - rows / band.rows), band: { ...band, rows: band.rows - rows } } : stack;
 }
@@ -133,23 +134,19 @@ function warnOfRoom(workings: PieceOnLoom, heightMm: number, findings: Findings)
 }
 
 /** With the beat that was measured, the piece worked out anew; the problems of that belong to what was measured. */
-function workOutAnew(piece: object, workings: PieceOnLoom, woven: WovenSoFar, findings: Findings): { readonly workings: PieceOnLoom; readonly isMeasured: boolean } | undefined {
+function workOutAnew(piece: FrameLoomPiece, workings: PieceOnLoom, woven: WovenSoFar, findings: Findings): { readonly workings: PieceOnLoom; readonly isMeasured: boolean } | undefined {
   const beat = measuredBeat(workings, woven, findings);
   if (findings.count > 0) return undefined;
   if (beat === undefined) return { workings, isMeasured: false };
   const again = Findings.in(findings.units);
-  const found = putOnLoom(Fields.of({ ...piece, beat, allowances: { ...Reflect.get(piece, 'allowances') as FrameLoomPiece['allowances'], marginWeft: marginOf(piece) } }, '', 'A piece', again));
+  // What was measured needs less in reserve, unless the piece has a margin of its own.
+  const allowances = { ...piece.allowances, marginWeft: piece.allowances?.marginWeft ?? DEFAULT_ALLOWANCES.marginWeft.swatch };
+  const found = putOnLoom(Fields.of({ ...piece, beat, allowances }, '', 'A piece', again));
   if (found !== undefined) return { workings: found, isMeasured: true };
   const read = again.outcome<never>(undefined);
   const reasons = read.ok ? '' : read.problems.map(({ message }) => message).join(' ');
   findings.reject('E_RANGE', '/heightMm', `With rows as close as that the piece does not work out. ${reasons} Count the rows and measure again.`);
   return undefined;
-}
-
-/** What was measured needs less in reserve, unless the piece has a margin of its own. */
-function marginOf(piece: object): number {
-  const asked = (Reflect.get(piece, 'allowances') as FrameLoomPiece['allowances'])?.marginWeft;
-  return asked ?? DEFAULT_ALLOWANCES.marginWeft.swatch;
 }
 
 /**
@@ -164,9 +161,9 @@ export function planRest(piece: unknown, woven: unknown, units: Units = 'cm'): O
   const findings = Findings.in(units);
   const said = readWoven(Fields.of(woven, '', 'What is woven', findings));
   const planned = putOnLoom(Fields.of(piece, '', 'A piece', findings.within('/piece')));
-  if (said === undefined || planned === undefined || typeof piece !== 'object' || piece === null) return findings.outcome<RestPlan>(undefined);
+  if (said === undefined || planned === undefined) return findings.outcome<RestPlan>(undefined);
   checkPlace(planned, said, findings);
-  const anew = findings.count > 0 ? undefined : workOutAnew(piece, planned, said, findings);
+  const anew = findings.count > 0 ? undefined : workOutAnew(piece as FrameLoomPiece, planned, said, findings);
   if (anew === undefined) return findings.outcome<RestPlan>(undefined);
   // Warnings of the whole piece were told with its plan; here only those of the rest count.
   const own = Findings.in(units);
@@ -175,15 +172,15 @@ export function planRest(piece: unknown, woven: unknown, units: Units = 'cm'): O
 
 function reckonRest(workings: PieceOnLoom, woven: WovenSoFar, isMeasured: boolean, findings: Findings): RestPlan {
   const { bandsDone, rows = 0, heightMm } = woven;
-  const planned = plannedSoFar(workings, woven);
-  const soFarMm = isMeasured && heightMm !== undefined ? heightMm * shrinkOf(workings) : planned.tabbyMm + planned.otherMm;
+  // Of use only where it was measured.
+  const soFarMm = (heightMm ?? 0) * shrinkOf(workings);
   const stacked = isMeasured ? refill(workings, woven, soFarMm) : workings.stacked;
   const open = stacked.slice(bandsDone).flatMap((stack) => (stack.index === bandsDone ? (restOfBand(stack, rows, workings) ?? []) : stack));
   const begun = isBegun(woven);
   const summed = addUp({ ...workings, stacked: open, ...(begun ? { isWarped: true } : {}) }, Findings.in(findings.units));
   const restMm = stacked.slice(bandsDone).reduce((sum, stack) => sum + leftMmOf(stack, stack.index === bandsDone ? rows : 0, workings), 0);
   const comesToMm = isMeasured ? soFarMm + restMm : workings.size.heightMm;
-  if (isMeasured && comesToMm > workings.size.heightMm + SAME_MM) warnOfRoom(workings, comesToMm, findings);
+  if (comesToMm > workings.size.heightMm + SAME_MM) warnOfRoom(workings, comesToMm, findings);
   return {
     rows: summed.bands.reduce((sum, { picks }) => sum + (picks ?? 0), 0),
     bands: summed.bands,

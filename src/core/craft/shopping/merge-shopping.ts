@@ -89,9 +89,11 @@ function wantedIn({ name, piece, plan }: Planned): Wanted[] {
   return [warp, ...wefts];
 }
 
-function addYarn(same: readonly Wanted[], index: number, findings: Findings): ShoppingYarn | undefined {
+/** Of one yarn: at least one piece wants it. */
+type Same = [Wanted, ...Wanted[]];
+
+function addYarn(same: Readonly<Same>, index: number, findings: Findings): ShoppingYarn {
   const [first] = same;
-  if (first === undefined) return undefined;
   const total = (of: (plan: WarpPlan) => number): number => same.reduce((sum, { plan }) => sum + of(plan), 0);
   const { tex } = gristOf(first.yarn);
   const withMarginMm = total((plan) => plan.withMarginMm);
@@ -114,13 +116,13 @@ function addYarn(same: readonly Wanted[], index: number, findings: Findings): Sh
 
 function mergeYarns(pieces: readonly Planned[], findings: Findings): ShoppingYarn[] {
   const wanted = pieces.flatMap(wantedIn);
-  const together = new Map<string, Wanted[]>();
+  const together = new Map<string, Same>();
   for (const want of [...wanted.filter(({ isWarp }) => isWarp), ...wanted.filter(({ isWarp }) => !isWarp)]) {
     const same = together.get(want.key);
     if (same === undefined) together.set(want.key, [want]);
     else same.push(want);
   }
-  return [...together.values()].flatMap((same, index) => addYarn(same, index, findings) ?? []);
+  return [...together.values()].map((same, index) => addYarn(same, index, findings));
 }
 
 function toolsOf({ name, piece, plan }: Planned): ShoppingTool[] {
@@ -129,7 +131,7 @@ function toolsOf({ name, piece, plan }: Planned): ShoppingTool[] {
   return [
     ...rods,
     { kind: 'spacer-card', acrossMm: roundUpTo(spacerCard.heightMm, 1), lengthMm: roundUpTo(spacerCard.widthMm, 1), count: 1, pieces: [name] },
-    ...(dowel === undefined || piece.dowel === undefined ? [] : [{ kind: 'dowel' as const, acrossMm: Math.max(piece.dowel.diameterMm, dowel.minDiameterMm), lengthMm: dowel.lengthMm, count: 1, pieces: [name] }]),
+    ...(dowel === undefined ? [] : [{ kind: 'dowel' as const, acrossMm: Math.max(piece.dowel?.diameterMm ?? 0, dowel.minDiameterMm), lengthMm: dowel.lengthMm, count: 1, pieces: [name] }]),
     ...(cordMm === undefined ? [] : [{ kind: 'cord' as const, lengthMm: cordMm, count: 1, pieces: [name] }]),
   ];
 }

@@ -196,3 +196,37 @@ test('no change of one value in a sound question makes it throw, and it is refus
     { numRuns: cases(3000), seed: 23 },
   );
 });
+
+describe('at the very limit', () => {
+  const told = (question: Asked): string => {
+    const outcome = reckon(question);
+    return outcome.ok ? '' : outcome.problems.map(({ message }) => message.replaceAll('\u00a0', ' ')).join(' ');
+  };
+
+  test('a shape may be half an end wider than the cloth, which is rounding, and no more', () => {
+    // 62 ends of 5 mm: 310 mm.
+    for (const baseMm of [309, 310, 312.5]) expect(refusals({ ...TRIANGLE, baseMm })).toEqual([]);
+    expect(told({ ...TRIANGLE, baseMm: 312.6 })).toBe('The shape is wider than the cloth, which takes 31 cm.');
+  });
+
+  test('twenty thousand rows are stepped out, and not one more', () => {
+    expect(answerTo({ ...TRIANGLE, heightMm: 20_000, pickSpacingMm: 1 })['rows']).toBe(20_000);
+    expect(told({ ...TRIANGLE, heightMm: 20_000, pickSpacingMm: 0.9999 })).toBe('That would be 20002 rows. Up to 20000 work.');
+  });
+
+  test('a stitch may take every end there is, and one knot fills two of them', () => {
+    expect(answerTo({ ...SOUMAK, ends: 4 })).toMatchObject({ stitches: 1 });
+    expect(answerTo({ ...RYA, ends: 2 })).toMatchObject({ knotsPerRow: 1, strands: 6 });
+    expect(told({ ...RYA, legEnds: 2, ends: 3 })).toBe('One knot needs 4 ends beside the plain ones at the edges.');
+  });
+
+  test('points are woven as they are drawn: a slope on one side only', () => {
+    // A right-angled triangle of 20 ends and 30 rows: each row loses two thirds of an end at its right.
+    const { areas = [] } = answerTo({ ...POINTS, points: [{ xMm: 0, yMm: 0 }, { xMm: 100, yMm: 0 }, { xMm: 0, yMm: 60 }] }) as Answers['shape'];
+    expect(areas).toHaveLength(30);
+    for (const row of areas) for (const { start } of row) expect(start).toBe(0);
+    expect([0, 15, 29].map((row) => areas[row]?.[0]?.ends ?? 0)).toEqual([20, 10, 0]);
+    expect(told({ ...POINTS, symmetric: true })).toBe('Points are woven as they are drawn, so both sides cannot be made alike. Leave this out, or say false.');
+    expect(refusals({ ...POINTS, symmetric: false })).toEqual([]);
+  });
+});
