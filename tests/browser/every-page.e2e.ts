@@ -63,6 +63,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/series/[slug]/lists': [['ilse', '/workroom/series/low-tide/lists']],
   '/workroom/students': [['ilse', '/workroom/students']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
+  '/workroom/bench/settings': [['ilse', '/workroom/bench/settings'], ['wren', '/workroom/bench/settings']],
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */

@@ -102,6 +102,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/workroom/series-folder/[slug]': [{ at: '/api/workroom/series-folder/low-tide', answers: '401 403 403 404 200 403 403' }],
   '/workroom': [{ at: '/workroom', answers: BENCH }],
   '/workroom/bench': [{ at: '/workroom/bench', answers: BENCH }],
+  '/workroom/bench/settings': [{ at: '/workroom/bench/settings', answers: BENCH }],
   '/workroom/money': [{ at: '/workroom/money', answers: TEACHERS }],
   '/workroom/series/new': [{ at: '/workroom/series/new', answers: TEACHERS }],
   '/workroom/series/bring-in': [{ at: '/workroom/series/bring-in', answers: TEACHERS }],

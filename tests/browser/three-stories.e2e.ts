@@ -42,6 +42,7 @@ async function takeInHand(bench: Page, name: string): Promise<void> {
   await bench.goto('/workroom/bench');
   await bench.getByRole('region', { name: 'Waiting photos, oldest first' }).getByRole('link', { name: new RegExp(name) }).click();
   await expect(bench.getByRole('heading', { level: 2, name: new RegExp(`^${name}`) })).toBeVisible();
+  await bench.locator('.bench-work[data-alive]').waitFor();
 }
 
 base.setTimeout(180_000);
@@ -94,8 +95,8 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
     await teacher.getByLabel('Note 1', { exact: true }).fill('Take up the slack from here outwards.');
     await teacher.getByLabel(/^To Nell/).fill('Nearly there.');
     await teacher.getByRole('button', { name: /^Mend first/ }).click();
-    await expect(teacher.getByRole('button', { name: 'Take back' })).toBeVisible();
-    await expect(teacher.getByText('Mend first: sent.').first()).toBeVisible({ timeout: 30_000 });
+    await expect(teacher.getByText(`Mend first: goes out to ${name} in ten seconds.`)).toBeVisible();
+    await expect(teacher.getByRole('button', { name: `Take back what you said to ${name}` })).toBeVisible();
     const letter = await letterTo(request, student.email, 'Mend first: Ilse Marrow has seen your photo');
     expect(letter.text).toContain('Take up the slack from here outwards.');
   });
@@ -111,7 +112,7 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
     await takeInHand(teacher, name);
     await expect(teacher.getByText('Take up the slack from here outwards.')).toBeVisible();
     await teacher.locator('body').press('w');
-    await expect(teacher.getByText('Weave on: sent.').first()).toBeVisible({ timeout: 30_000 });
+    await expect(teacher.getByText(`Weave on: goes out to ${name} in ten seconds.`)).toBeVisible();
     await letterTo(request, student.email, 'Weave on: Ilse Marrow has seen your photo');
   });
 

@@ -1,80 +1,113 @@
 import { useEffect, useReducer, useRef, useState } from 'react';
 import type { NoteInput } from '#contracts/bench.ts';
+import { answerAfter, newAnswer } from '#islands/bench/answer.ts';
+import { KeyList } from '#islands/bench/KeyList.tsx';
+import { PhotoFrame, type Shown } from '#islands/bench/PhotoFrame.tsx';
+import { Phrases } from '#islands/bench/Phrases.tsx';
 import { PinnedNotes } from '#islands/bench/PinnedNotes.tsx';
-import { PhotoWithPins } from '#islands/bench/PhotoWithPins.tsx';
-import { NO_PINS, pinsAfter } from '#islands/bench/pins.ts';
+import { Pins } from '#islands/bench/Pins.tsx';
 import { useBenchKeys } from '#islands/bench/use-bench-keys.ts';
+import { closer, moved, onPhoto, STEP, turned, WHOLE } from '#islands/bench/view.ts';
+import { ViewBar } from '#islands/bench/ViewBar.tsx';
 import { TextField } from '#islands/ui/Field.tsx';
 import { Glyph } from '#islands/ui/Glyph.tsx';
-import { ToastRegion, useToasts } from '#islands/ui/ToastRegion.tsx';
+import { typedBefore } from '#islands/ui/typed-before.ts';
 
 export interface ReviewPhotoProps {
   /** Address the verdict is posted to. */
   action: string;
-  photo: { publicId: string; src: string; width: number; height: number; alt: string };
+  photo: Shown & { publicId: string };
+  /** What she has shown before, the newest first, each with the words it is called by. */
+  earlier: readonly (Shown & { says: string })[];
   studentName: string;
-  /** What was typed before, when the form came back. */
+  phrases: readonly string[];
+  /** What was typed before, when the form came back or a verdict was taken back. */
   typed: { words: string; notes: readonly NoteInput[] };
   errors: { words?: string | undefined; notes?: string | undefined };
+  /** Public id of the photo that is taken in hand after the verdict. */
+  next: string | null;
   /** Addresses of the photo before and after in the queue. */
   before: string | null;
   after: string | null;
 }
 
 type Verdict = 'weave-on' | 'mend-first';
-const WORDS: Record<Verdict, string> = { 'weave-on': 'Weave on', 'mend-first': 'Mend first' };
-/** How long a verdict can be taken back before it is sent. */
-const HOLD_MS = 10_000;
+/** How far one press of an arrow key moves a photo that is closer than its frame, as a share of it. */
+const PAN = 0.12;
 
-/** The photo at the bench: pins by mouse, finger or keys, words, and the verdict, which can be taken back for ten seconds. */
-export function ReviewPhoto({ action, photo, studentName, typed, errors, before, after }: ReviewPhotoProps) {
-  const [pins, change] = useReducer(pinsAfter, { ...NO_PINS, notes: typed.notes });
-  const [held, setHeld] = useState<Verdict | null>(null);
+const goTo = (address: string | null): void => { if (address !== null) location.assign(address); };
+
+/** The photo at the bench: how it is looked at, pins by mouse, finger or keys, words and phrases, and the verdict. */
+export function ReviewPhoto({ action, photo, earlier, studentName, phrases, typed, errors, next, before, after }: ReviewPhotoProps) {
+  const [answer, change] = useReducer(answerAfter, newAnswer(typed.words, typed.notes));
+  const [view, look] = useState(WHOLE);
+  const [beside, setBeside] = useState(-1);
+  const [keysShown, showKeys] = useState(false);
+  const [alive, setAlive] = useState(false);
   const form = useRef<HTMLFormElement>(null);
-  const area = useRef<HTMLDivElement>(null);
-  const toasts = useToasts();
+  const sent = useRef(false);
+  const aspect = photo.width / photo.height;
+  const laid = earlier[beside];
 
-  const choose = (verdict: Verdict) => {
-    if (held !== null || form.current?.reportValidity() === false) return;
-    setHeld(verdict);
-    toasts.say(`${WORDS[verdict]}: goes out to ${studentName} in ten seconds.`, {
-      act: { label: 'Take back', run: () => setHeld(null) },
-      after: () => form.current?.requestSubmit(),
-      lastsMs: HOLD_MS,
-    });
-  };
-  useBenchKeys(area, { choose, before, after, put: () => change({ kind: 'put', xPermille: 500, yPermille: 500 }) });
-  useEffect(() => { area.current?.setAttribute('data-alive', ''); }, []);
+  useEffect(() => {
+    for (const [name, text] of form.current === null ? [] : typedBefore(form.current)) if (name === 'words') change({ kind: 'write', words: text });
+    setAlive(true);
+  }, []);
+
+  const put = () => change({ kind: 'put', by: 'key', ...(onPhoto(view, aspect, { x: 0, y: 0 }) ?? { xPermille: 500, yPermille: 500 }) });
+  const layNext = () => setBeside((at) => (at + 1 < earlier.length ? at + 1 : -1));
+  const say = (verdict: Verdict) => form.current?.requestSubmit(form.current.querySelector<HTMLElement>(`button[value="${verdict}"]`));
+  useBenchKeys({
+    'w': () => say('weave-on'),
+    'm': () => say('mend-first'),
+    'z': () => document.querySelector<HTMLFormElement>('form[data-take-back]')?.requestSubmit(),
+    'j': () => goTo(after),
+    'k': () => goTo(before),
+    'p': put,
+    't': () => form.current?.querySelector<HTMLElement>('textarea[name="words"]')?.focus(),
+    'c': layNext,
+    'r': () => look(turned),
+    '+': () => look((was) => closer(was, aspect, STEP)),
+    '-': () => look((was) => closer(was, aspect, 1 / STEP)),
+    '0': () => look(WHOLE),
+    '?': () => showKeys(true),
+    phrase: (number) => { const phrase = phrases[number - 1]; if (phrase !== undefined) change({ kind: 'insert', phrase }); },
+    pan: view.zoom > 1 ? (dx, dy) => look((was) => moved(was, aspect, dx * PAN, dy * PAN)) : null,
+  });
 
   return (
-    <div ref={area} className="bench-work">
-      <PhotoWithPins photo={photo} pins={pins} change={change} />
-      <form ref={form} method="post" action={action} className="bench-form">
+    <div className="bench-work" data-alive={alive || undefined}>
+      <div className={laid === undefined ? 'panes' : 'panes is-beside'}>
+        <figure>
+          <PhotoFrame {...{ photo, view, look }} onPress={(at, by) => { const place = onPhoto(view, aspect, at); if (place !== null) change({ kind: 'put', by, ...place }); }}>
+            <Pins {...{ answer, change, view, aspect }} />
+          </PhotoFrame>
+          {laid !== undefined && <figcaption className="small">In hand</figcaption>}
+        </figure>
+        {laid !== undefined && <figure><PhotoFrame photo={laid} view={view} look={look} /><figcaption className="small">{laid.says}</figcaption></figure>}
+      </div>
+      {alive && <ViewBar {...{ view, look, aspect }} onPin={put} onKeys={() => showKeys(true)} beside={earlier.length === 0 ? null : { says: besideWords(beside, earlier.length), next: layNext }} />}
+      <form ref={form} method="post" action={action} className="bench-form" onSubmit={(event) => { if (sent.current) event.preventDefault(); sent.current = true; }}>
         <input type="hidden" name="photo" value={photo.publicId} />
-        <input type="hidden" name="notes" value={JSON.stringify(pins.notes)} />
-        {held !== null && <input type="hidden" name="verdict" value={held} />}
-        <PinnedNotes pins={pins} change={change} error={errors.notes} />
-        <TextField name="words" label={`To ${studentName}`} hint="Goes into the letter, above the notes." defaultValue={typed.words} error={errors.words} maxLength={2_000} optional />
+        {next !== null && <input type="hidden" name="next" value={next} />}
+        <input type="hidden" name="notes" value={JSON.stringify(answer.notes)} />
+        <PinnedNotes {...{ answer, change }} error={errors.notes} />
+        <TextField
+          name="words" label={`To ${studentName}`} hint="Goes into the letter, above the notes." error={errors.words} maxLength={2_000} optional
+          value={answer.words} onChange={(event) => change({ kind: 'write', words: event.target.value })} onFocus={() => change({ kind: 'choose', index: -1 })}
+        />
+        <Phrases {...{ phrases, answer, change, studentName }} />
         <div className="verdict">
-          <VerdictButton verdict="weave-on" held={held} onChoose={choose} />
-          <VerdictButton verdict="mend-first" held={held} onChoose={choose} />
+          <button type="submit" name="verdict" value="weave-on" className="btn btn-on" aria-keyshortcuts="W"><Glyph name="on" />Weave on <span className="key only-desk" aria-hidden="true">W</span></button>
+          <button type="submit" name="verdict" value="mend-first" className="btn btn-mend full" aria-keyshortcuts="M"><Glyph name="mend" />Mend first <span className="key only-desk" aria-hidden="true">M</span></button>
         </div>
       </form>
-      <ToastRegion toasts={toasts} />
+      {keysShown && <KeyList open onClose={() => showKeys(false)} />}
     </div>
   );
 }
 
-/** Without script it sends at once; with it, the press only chooses. */
-function VerdictButton({ verdict, held, onChoose }: { verdict: Verdict; held: Verdict | null; onChoose: (verdict: Verdict) => void }) {
-  const weaveOn = verdict === 'weave-on';
-  return (
-    <button
-      type="submit" name="verdict" value={verdict} className={weaveOn ? 'btn btn-on' : 'btn btn-mend full'} aria-pressed={held === verdict}
-      aria-keyshortcuts={weaveOn ? 'W' : 'M'}
-      onClick={(event) => { event.preventDefault(); onChoose(verdict); }}
-    >
-      <Glyph name={weaveOn ? 'on' : 'mend'} />{WORDS[verdict]} <span className="key only-desk" aria-hidden="true">{weaveOn ? 'W' : 'M'}</span>
-    </button>
-  );
+function besideWords(beside: number, count: number): string {
+  if (beside < 0) return count === 1 ? 'Lay her earlier photo beside it' : 'Lay earlier photos beside it';
+  return beside + 1 < count ? 'The one before that' : 'Put it away';
 }

@@ -72,6 +72,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/students': 'teacher',
   '/workroom': 'bench',
   '/workroom/bench': 'bench',
+  '/workroom/bench/settings': 'bench',
   '/workroom/series/new': 'teacher',
   '/workroom/series/bring-in': 'teacher',
   '/workroom/series/[slug]': 'teacher',

@@ -2,10 +2,10 @@ import { beforeEach, describe, expect, test } from 'vitest';
 import { VerdictForm } from '#contracts/bench.ts';
 import { TEMPLATES } from '#server/mail/templates/index.ts';
 import { Lesson, Mail, Media, PartOpening, ProgressPhoto, User, type Enrolment, type Series } from '#server/models/index.ts';
-import { giveVerdict } from '#server/use-cases/bench/give-verdict.ts';
 import { tellOpenings } from '#server/use-cases/openings/tell-openings.ts';
 import { contextFor, contextOf } from '../../support/context.ts';
 import { buildEnrolment, buildLesson, buildSeries, buildUser, buildWorkroom } from '../../support/factories.ts';
+import { giveVerdict } from '../../support/verdicts.ts';
 
 const DAY_MS = 86_400_000;
 const NOW = new Date('2026-12-01T10:00:00Z');

@@ -13,6 +13,7 @@ import { createOpenings } from './0010-create-openings.ts';
 import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 import { createCalendars } from './0012-create-calendars.ts';
 import { createPieceDrafts } from './0013-create-piece-drafts.ts';
+import { createBench } from './0014-create-bench.ts';
 import { createNotices } from './0016-create-notices.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 
@@ -30,6 +31,7 @@ export const migrations: readonly Migration[] = [
   createEarlierDrafts,
   createCalendars,
   createPieceDrafts,
+  createBench,
   createNotices,
   createKeptThings,
 ];

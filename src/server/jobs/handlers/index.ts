@@ -2,6 +2,7 @@
 import type { z } from 'astro/zod';
 import type { Context } from '#server/context.ts';
 import type { JobDefinition } from '#server/jobs/definition.ts';
+import { sendVerdict } from '#server/jobs/definitions/bench.ts';
 import { settleCheckout, settlePaymentEvent } from '#server/jobs/definitions/payments.ts';
 import { processVideo } from '#server/jobs/definitions/videos.ts';
 import { sendPasswordLink } from '#server/jobs/definitions/people.ts';
@@ -52,6 +53,11 @@ export const REGISTERED: readonly RegisteredJob[] = [
       const { giveUpVideo } = await import('#server/use-cases/videos/give-up-video.ts');
       return (ctx, { video }) => giveUpVideo(ctx, video);
     },
+  ),
+  bind(
+    sendVerdict,
+    async () => (await import('#server/use-cases/bench/send-verdict.ts')).sendVerdict,
+    async () => (await import('#server/use-cases/bench/send-verdict.ts')).bringBackVerdict,
   ),
   bind(sendPasswordLink, async () => (await import('#server/use-cases/people/write-password-link.ts')).writePasswordLink),
 ];

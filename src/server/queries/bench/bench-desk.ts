@@ -1,33 +1,66 @@
 /** What lies on the bench: the queue, and for the photo in hand the student's plan and her earlier photos. */
 import { fitPiece } from '#core/craft/fit.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';
+import type { NoteInput } from '#contracts/bench.ts';
 import type { Actor } from '#server/context.ts';
+import { HeldVerdict, ProgressPhoto, User } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { photoThread, type ThreadPhoto } from '#server/queries/photos/photo-thread.ts';
+import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
+import { phrasesOfWorkroom } from './phrases-of.ts';
 import { waitingPhotos, type WaitingPhoto } from './waiting-photos.ts';
+
+/** What was said of a photo and taken back: words and pins to go on with. */
+export interface TakenBack {
+  readonly words: string;
+  readonly notes: readonly NoteInput[];
+  readonly by: string;
+  readonly byOther: boolean;
+}
+
+export interface PhotoInHand {
+  readonly photo: WaitingPhoto;
+  readonly before: WaitingPhoto | null;
+  readonly after: WaitingPhoto | null;
+  /** Null when the piece cannot be reckoned for her loom. */
+  readonly fitted: FittedPiece | null;
+  /** Of this checkpoint, the photo in hand among them. */
+  readonly thread: readonly ThreadPhoto[];
+  /** Of the whole seat, the newest first, without the one in hand. */
+  readonly earlier: readonly EarlierPhoto[];
+  readonly phrases: readonly string[];
+  readonly takenBack: TakenBack | null;
+}
 
 export interface BenchDesk {
   readonly queue: readonly WaitingPhoto[];
-  readonly inHand: {
-    readonly photo: WaitingPhoto;
-    readonly before: WaitingPhoto | null;
-    readonly after: WaitingPhoto | null;
-    /** Null when the piece cannot be reckoned for her loom. */
-    readonly fitted: FittedPiece | null;
-    readonly thread: readonly ThreadPhoto[];
-  } | null;
+  readonly inHand: PhotoInHand | null;
 }
 
-/** `wanted` is the public id of the photo to take in hand; without it, or when it was answered, the oldest is taken. */
+/** `wanted` is the public id of the photo to take in hand; without it, or when it was answered, the first of the queue is taken. */
 export async function benchDesk(actor: Actor, wanted: string | null): Promise<BenchDesk> {
   const queue = await waitingPhotos(actor);
   const index = Math.max(0, queue.findIndex(({ publicId }) => publicId === wanted));
   const photo = queue[index];
   if (photo === undefined) return { queue, inHand: null };
-  const [{ pattern, mine }, thread] = await Promise.all([piecesOf(photo.seriesId, photo.enrolmentId), photoThread(photo.enrolmentId, photo.lessonId)]);
+  const [{ pattern, mine }, thread, earlier, phrases, takenBack] = await Promise.all([
+    piecesOf(photo.seriesId, photo.enrolmentId),
+    photoThread(photo.enrolmentId, photo.lessonId),
+    earlierPhotos(photo.enrolmentId, photo.publicId),
+    phrasesOfWorkroom(photo.workroomId),
+    takenBackOf(actor, photo.publicId),
+  ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, earlier, phrases, takenBack },
   };
+}
+
+async function takenBackOf(actor: Actor, publicId: string): Promise<TakenBack | null> {
+  const photo = await ProgressPhoto.findOne({ where: { publicId } });
+  const held = photo === null ? null : await HeldVerdict.findByPk(photo.id);
+  if (held === null || held.goesOutAt !== null) return null;
+  const by = await User.findByPk(held.byId);
+  return { words: held.words, notes: held.notes, by: by?.name ?? '', byOther: held.byId !== actor.userId };
 }

@@ -1,4 +1,7 @@
-/** Photos that wait for a verdict in the workrooms where somebody sits at the bench, oldest first. */
+/**
+ * Photos that wait for a verdict in the workrooms where somebody sits at the bench: first the one whose answer is due
+ * first, which in one workroom is the oldest. One whose verdict is on its way out does not wait any more.
+ */
 import { QueryTypes } from 'sequelize';
 import type { MyPiece } from '#core/craft/fit.ts';
 import type { Actor } from '#server/context.ts';
@@ -22,7 +25,12 @@ export interface WaitingPhoto {
   readonly partTitle: string;
   readonly checkpoint: { readonly ask: string; readonly look: readonly string[] } | null;
   readonly mine: MyPiece | null;
+  readonly workroomId: number;
+  /** Days within which that workroom promises to answer. */
+  readonly answerDays: number;
 }
+
+const WAITS = `p.verdict = 'waits' AND NOT EXISTS (SELECT 1 FROM held_verdicts h WHERE h.photo_id = p.id AND h.goes_out_at IS NOT NULL)`;
 
 const SELECT = `
   SELECT p.public_id AS publicId, m.public_id AS mediaId, m.files, p.words, p.created_at AS postedAt,
@@ -30,19 +38,21 @@ const SELECT = `
          s.id AS seriesId, s.slug AS seriesSlug, s.title AS seriesTitle,
          l.id AS lessonId, l.title AS partTitle, l.checkpoint,
          (SELECT COUNT(*) FROM lessons b WHERE b.series_id = s.id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber,
-         mp.data AS mine
+         mp.data AS mine, w.id AS workroomId, w.answer_days AS answerDays
     FROM progress_photos p
     JOIN media m ON m.id = p.media_id
     JOIN enrolments e ON e.id = p.enrolment_id
     JOIN users u ON u.id = e.user_id
     JOIN series s ON s.id = e.series_id
+    JOIN workrooms w ON w.id = s.workroom_id
     JOIN lessons l ON l.id = p.lesson_id
     LEFT JOIN my_pieces mp ON mp.enrolment_id = e.id
-   WHERE p.verdict = 'waits' AND s.workroom_id IN (:workrooms)
-   ORDER BY p.created_at, p.id
+   WHERE ${WAITS} AND s.workroom_id IN (:workrooms)
+   ORDER BY p.created_at + INTERVAL w.answer_days DAY, p.id
    LIMIT :limit`;
 
-function workroomsOf(actor: Actor): number[] {
+/** Ids of the workrooms where `actor` sits at the bench. */
+export function workroomsOf(actor: Actor): number[] {
   return [...(actor.workroomId === null ? [] : [actor.workroomId]), ...actor.helpsInWorkroomIds];
 }
 
@@ -57,7 +67,7 @@ export async function countWaitingPhotos(actor: Actor): Promise<number> {
   if (workrooms.length === 0) return 0;
   const [row] = await sequelize.query<{ n: number }>(
     `SELECT COUNT(*) AS n FROM progress_photos p JOIN enrolments e ON e.id = p.enrolment_id JOIN series s ON s.id = e.series_id
-      WHERE p.verdict = 'waits' AND s.workroom_id IN (:workrooms)`,
+      WHERE ${WAITS} AND s.workroom_id IN (:workrooms)`,
     { replacements: { workrooms }, type: QueryTypes.SELECT },
   );
   return row?.n ?? 0;

@@ -1,0 +1,28 @@
+/** What a student has shown before in one series, at whatever checkpoint: to lay beside the photo in hand. */
+import { QueryTypes } from 'sequelize';
+import { sequelize } from '#server/db/sequelize.ts';
+
+export interface EarlierPhoto {
+  readonly publicId: string;
+  readonly mediaId: string;
+  readonly width: number;
+  readonly height: number;
+  readonly postedAt: Date;
+  readonly partNumber: number;
+  readonly verdict: 'waits' | 'weave-on' | 'mend-first';
+}
+
+/** Photos of the seat older than `publicId`, the newest first. */
+export function earlierPhotos(enrolmentId: number, publicId: string, limit = 8): Promise<EarlierPhoto[]> {
+  return sequelize.query<EarlierPhoto>(
+    `SELECT p.public_id AS publicId, m.public_id AS mediaId, m.width, m.height, p.created_at AS postedAt, p.verdict,
+            (SELECT COUNT(*) FROM lessons b WHERE b.series_id = l.series_id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber
+       FROM progress_photos p
+       JOIN progress_photos shown ON shown.public_id = :publicId
+       JOIN media m ON m.id = p.media_id
+       JOIN lessons l ON l.id = p.lesson_id
+      WHERE p.enrolment_id = :enrolmentId AND (p.created_at, p.id) < (shown.created_at, shown.id)
+      ORDER BY p.created_at DESC, p.id DESC LIMIT :limit`,
+    { replacements: { enrolmentId, publicId, limit }, type: QueryTypes.SELECT },
+  );
+}

@@ -1,0 +1,67 @@
+import { Op } from 'sequelize';
+import type { Context } from '#server/context.ts';
+import { withTransaction } from '#server/db/transaction.ts';
+import { found } from '#server/errors.ts';
+import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
+import { Enrolment, HeldVerdict, Lesson, PartOpening, PhotoNote, ProgressPhoto, Series, User } from '#server/models/index.ts';
+import { putUpLetter } from '#server/notices/put-up.ts';
+
+/** A verdict as it was said, `round` telling which time. */
+export interface SaidVerdict {
+  readonly photoId: number;
+  readonly round: number;
+}
+
+/**
+ * Carries out a verdict that was not taken back: the photo is answered, the part behind it opens, the student gets her
+ * letter. Once, however often it is asked.
+ */
+export async function sendVerdict(ctx: Context, { photoId, round }: SaidVerdict): Promise<void> {
+  await withTransaction(async () => {
+    const photo = await ProgressPhoto.findByPk(photoId, { lock: true });
+    const held = await HeldVerdict.findByPk(photoId);
+    if (photo === null || held === null || held.goesOutAt === null || held.round !== round) return;
+    await photo.update({ verdict: held.verdict, verdictWords: held.words, verdictAt: ctx.clock.now(), verdictById: held.byId });
+    await PhotoNote.bulkCreate(held.notes.map((note, index) => ({ photoId, position: index + 1, authorId: held.byId, ...note })));
+    await tellStudent(photo, held);
+    await held.destroy();
+  });
+}
+
+/** When all tries failed: the photo comes back to the bench, with what was said of it. */
+export async function bringBackVerdict(_ctx: Context, { photoId, round }: SaidVerdict): Promise<void> {
+  await HeldVerdict.update({ goesOutAt: null }, { where: { photoId, round } });
+}
+
+async function tellStudent(photo: ProgressPhoto, { verdict, words, notes, byId }: HeldVerdict): Promise<void> {
+  const enrolment = found(await Enrolment.findByPk(photo.enrolmentId));
+  const [series, student, by] = [found(await Series.findByPk(enrolment.seriesId)), found(await User.findByPk(enrolment.userId)), found(await User.findByPk(byId))];
+  const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null, publishedVersionId: { [Op.ne]: null } }, order: ['position', 'id'] });
+  const partNumber = lessons.findIndex(({ id }) => id === photo.lessonId) + 1;
+  const opened = verdict === 'weave-on' ? await openedBy(photo, lessons) : [];
+  const letter: LetterTo<'verdict'> = {
+    template: 'verdict',
+    dedupeKey: `verdict:${photo.publicId}`,
+    to: { userId: student.id, name: student.name, address: student.email },
+    data: {
+      seriesTitle: series.title,
+      seriesSlug: series.slug,
+      partNumber,
+      teacherName: by.name,
+      verdict,
+      words,
+      notes: notes.map((note) => note.words),
+      openedParts: opened.map((lesson) => lessons.indexOf(lesson) + 1),
+    },
+  };
+  await postLetter(letter);
+  await putUpLetter(letter, { kind: 'verdict', seriesId: series.id });
+}
+
+/** The parts that waited for this verdict. They are put on record as told, so that no second letter says they are open. */
+async function openedBy({ enrolmentId, lessonId, verdictAt }: ProgressPhoto, lessons: readonly Lesson[]): Promise<Lesson[]> {
+  const shown = lessons.find(({ id }) => id === lessonId);
+  const opened = lessons.filter(({ opens, isPreview }) => !isPreview && opens.rule === 'after-verdict' && opens.lesson === shown?.publicId);
+  await PartOpening.bulkCreate(opened.map(({ id }) => ({ enrolmentId, lessonId: id, toldBy: 'verdict' as const, openedAt: verdictAt ?? new Date() })), { ignoreDuplicates: true });
+  return opened;
+}
