@@ -4,11 +4,11 @@ import { VerdictForm } from '#contracts/bench.ts';
 import { actorOfToken, beginSession } from '#server/auth/sessions.ts';
 import { Mail, Media, NoticeReceipt, ProgressPhoto, User, type Enrolment, type Lesson, type Series } from '#server/models/index.ts';
 import { myNotices, unreadNotices } from '#server/queries/notices/my-notices.ts';
-import { giveVerdict } from '#server/use-cases/bench/give-verdict.ts';
 import { markRead } from '#server/use-cases/notices/mark-read.ts';
 import { tellOpenings } from '#server/use-cases/openings/tell-openings.ts';
 import { actorOf, contextFor, contextOf } from '../../support/context.ts';
 import { buildEnrolment, buildLesson, buildSeries, buildUser, buildWorkroom } from '../../support/factories.ts';
+import { giveVerdict } from '../../support/verdicts.ts';
 
 const NOW = new Date('2026-12-01T10:00:00Z');
 
