@@ -40,7 +40,7 @@ export function amountLine(made: Made, key: string, label: string): AnswerLine[]
 }
 
 /** Every step of a piece's reckoning, when somebody asks. */
-export const workingsOf = ({ piece }: Made, units: Units) => () => written(explainPiece(piece, units));
+export const workingsOf = ({ piece }: Made, units: Units) => ({ asked: [piece, units], workings: () => written(explainPiece(piece, units)) });
 
 /** Length, weight and balls of a yarn, with its reserve: what to have in hand. */
 export function yarnInHand(made: Made, role: string): AnswerLine[] {
@@ -94,5 +94,5 @@ export function plainCloth(cloth: Cloth, reader: FormReader): Made | undefined {
 export function answerCloth(made: Made | undefined, dressed: DressedWarp | undefined, reader: FormReader): Section {
   if (made === undefined || dressed === undefined || !reader.isSound(...NEEDS)) return { ...NO_ANSWER, needs: NEEDS };
   const rows = amountLine(made, 'band.cloth.rows', 'Rows').map(loud);
-  return { lines: [...yarnInHand(made, 'ground'), ...rows, ...rowLines(made, dressed, reader.units), ...reserveLines(made)], notes: made.notes, needs: NEEDS, workings: workingsOf(made, reader.units) };
+  return { lines: [...yarnInHand(made, 'ground'), ...rows, ...rowLines(made, dressed, reader.units), ...reserveLines(made)], notes: made.notes, needs: NEEDS, ...workingsOf(made, reader.units) };
 }

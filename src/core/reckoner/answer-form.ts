@@ -1,4 +1,5 @@
 /** Everything the reckoner's page answers to what was typed. */
+import { dequal } from 'dequal/lite';
 import { answerCloth, plainCloth } from '#core/reckoner/answer-cloth.ts';
 import { NO_ANSWER, type FieldErrors, type Section } from '#core/reckoner/answer-line.ts';
 import { answerPiece, type PieceSection } from '#core/reckoner/answer-piece.ts';
@@ -68,8 +69,31 @@ function tellOnce(sections: Omit<ReckonerAnswer, 'errors'>): Omit<ReckonerAnswer
   };
 }
 
-/** Yarn, ends and rows feed what is woven of them; each part answers as far as its own fields can be used. */
-export function answerForm(form: ReckonerForm): ReckonerAnswer {
+/** What says the same as before stays the very same, so that who draws it sees at once that nothing is to be done. */
+function asBefore<T extends object>(now: T, before: T | undefined): T {
+  const data = (of: T): T => ({ ...of, workings: undefined });
+  return before !== undefined && dequal(data(now), data(before)) ? before : now;
+}
+
+function keepWhatStands(now: ReckonerAnswer, before: ReckonerAnswer): ReckonerAnswer {
+  return {
+    errors: asBefore(now.errors, before.errors),
+    yarn: asBefore(now.yarn, before.yarn),
+    sett: asBefore(now.sett, before.sett),
+    cloth: asBefore(now.cloth, before.cloth),
+    soumak: asBefore(now.soumak, before.soumak),
+    rya: asBefore(now.rya, before.rya),
+    shape: asBefore(now.shape, before.shape),
+    rod: asBefore(now.rod, before.rod),
+    piece: asBefore(now.piece, before.piece),
+  };
+}
+
+/**
+ * Yarn, ends and rows feed what is woven of them; each part answers as far as its own fields can be used.
+ * @param before What was answered last: parts that answer the same are handed back from it.
+ */
+export function answerForm(form: ReckonerForm, before?: ReckonerAnswer): ReckonerAnswer {
   const reader = new FormReader(form);
   const typedYarn = readTypedYarn(reader);
   const yarn = orFailed(() => answerYarn(typedYarn, reader));
@@ -92,5 +116,6 @@ export function answerForm(form: ReckonerForm): ReckonerAnswer {
     rod: orFailed(() => answerRod(reader)),
     piece: orFailed(() => answerPiece(cloth, rya, reader)),
   });
-  return { errors: reader.errors, ...sections };
+  const answer = { errors: reader.errors, ...sections };
+  return before === undefined ? answer : keepWhatStands(answer, before);
 }

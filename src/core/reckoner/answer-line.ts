@@ -29,6 +29,8 @@ export interface Section {
   readonly needs: readonly ReckonerField[];
   /** Every step of the reckoning, for who asks to see it. */
   readonly workings?: () => readonly Working[];
+  /** What the workings are of: of the same they are the same. */
+  readonly asked?: unknown;
   /** Something in it broke that never should. */
   readonly failed?: true;
 }

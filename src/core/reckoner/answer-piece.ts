@@ -63,5 +63,5 @@ export function answerPiece(cloth: Cloth | undefined, rya: TypedRya | undefined,
     ...(diameterMm === undefined ? {} : { dowel: { diameterMm } }),
   }, reader, RYA_KEYS);
   if (made === undefined || !reader.isSound(...needs)) return none;
-  return { lines: linesOf(made), notes: made.notes, needs, made, workings: workingsOf(made, reader.units) };
+  return { lines: linesOf(made), notes: made.notes, needs, made, ...workingsOf(made, reader.units) };
 }

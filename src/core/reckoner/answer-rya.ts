@@ -89,5 +89,5 @@ export function answerRya(typed: TypedRya | undefined, yarn: Yarn | undefined, d
     return none;
   }
   if (!('cutMm' in outcome.value) || !reader.isSound(...NEEDS)) return none;
-  return { lines: lines(outcome.value, yarn, typed).map((line) => named(line, STEPS)), notes: [], needs: NEEDS, workings: () => written(explainRya(question, reader.units)) };
+  return { lines: lines(outcome.value, yarn, typed).map((line) => named(line, STEPS)), notes: [], needs: NEEDS, asked: [question, reader.units], workings: () => written(explainRya(question, reader.units)) };
 }

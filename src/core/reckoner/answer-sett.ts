@@ -108,6 +108,6 @@ export function answerSett(typed: TypedLoom | undefined, yarn: Yarn | undefined,
   }
   const suits = yarn === undefined ? [] : yarnLines(dressed, yarn, reader);
   const offered = yarn === undefined ? {} : { offered: offeredSpacings(typed.loom, dressed.thread, threadOf(yarn, ASHENHURST_K.weft)) };
-  const workings = plain === undefined ? {} : { workings: workingsOf(plain, reader.units) };
+  const workings = plain === undefined ? {} : workingsOf(plain, reader.units);
   return { ...workings, lines: [...endLines(dressed, typed), ...suits, ...evenLines(typed)].map((line) => named(line, STEPS)), notes: findings.warnings, needs: SETT_FIELDS, dressed, ...offered };
 }

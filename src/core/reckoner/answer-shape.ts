@@ -119,5 +119,5 @@ export function answerShape(ground: ShapeGround | undefined, reader: FormReader)
   }
   if (!('widths' in outcome.value) || !reader.isSound(...needs)) return { ...NO_ANSWER, needs };
   const drawing = drawRows(outcome.value.widths, { spacingMm: ends.spacingMm, pickSpacingMm, ends: ends.working, aligned: 'middle' });
-  return { lines: shapeLines(outcome.value, reader.units), notes: [], needs, drawing, runs: runsOf(outcome.value.widths), workings: () => written(explainShape(question, reader.units)) };
+  return { lines: shapeLines(outcome.value, reader.units), notes: [], needs, drawing, runs: runsOf(outcome.value.widths), asked: [question, reader.units], workings: () => written(explainShape(question, reader.units)) };
 }

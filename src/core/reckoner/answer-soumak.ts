@@ -57,10 +57,12 @@ export function answerSoumak(cloth: Cloth | undefined, dressed: DressedWarp | un
   const diameterSumMm = dressed.workingDiameterMm + threadOf(cloth.yarn, ASHENHURST_K.weft).loftMm;
   const { ends } = made.plan;
   const row = { over: band.over, back: band.back, spacingMm: ends.spacingMm, diameterSumMm, ends: ends.working };
+  const ofPiece = workingsOf(made, reader.units);
   return {
     lines: lines(made, band, cloth, diameterSumMm),
     notes: made.notes,
     needs: NEEDS,
-    workings: () => [...written(explainSoumak(row, reader.units)), ...workingsOf(made, reader.units)()],
+    asked: [row, ofPiece.asked],
+    workings: () => [...written(explainSoumak(row, reader.units)), ...ofPiece.workings()],
   };
 }

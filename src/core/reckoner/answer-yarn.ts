@@ -97,5 +97,5 @@ export function answerYarn(typed: Yarn | undefined, reader: FormReader): Section
   }
   if (!('denier' in outcome.value) || !reader.isSound(...YARN_FIELDS)) return { ...NO_ANSWER, needs };
   const lines = [...plies(typed, outcome.value), ...counts(outcome.value, reader.units), ...thickness(outcome.value, typed)];
-  return { lines: lines.map((line) => named(line, STEPS)), notes: outcome.warnings, needs, workings: () => written(explainYarn(typed, reader.units)) };
+  return { lines: lines.map((line) => named(line, STEPS)), notes: outcome.warnings, needs, asked: [typed, reader.units], workings: () => written(explainYarn(typed, reader.units)) };
 }

@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import type { OfferedSpacing } from '#core/craft/offered-spacings.ts';
 import type { SpacingAdvice } from '#core/craft/sett.ts';
@@ -17,7 +18,7 @@ interface OfferedProps {
 }
 
 /** The spacings a loom has, and what the yarn of the page does at each: there are no others. */
-export function Offered({ spacings, kind, units }: OfferedProps) {
+export const Offered = memo(function Offered({ spacings, kind, units }: OfferedProps) {
   const { one } = LOOM_KINDS[LOOM_KIND_NAMES.find((name) => name === kind) ?? 'nailed-frame'].holder;
   return (
     <div className="scrolls mt-5">
@@ -37,4 +38,4 @@ export function Offered({ spacings, kind, units }: OfferedProps) {
       </table>
     </div>
   );
-}
+});

@@ -1,11 +1,10 @@
 import type { ReactNode } from 'react';
+import type { PartWords } from '#islands/reckoner/parts.ts';
 import { Boundary } from '#islands/ui/Boundary.tsx';
 import { Button } from '#islands/ui/Button.tsx';
 
 interface PartProps {
-  readonly id: string;
-  readonly title: string;
-  readonly says: string;
+  readonly words: PartWords;
   readonly fields: ReactNode;
   readonly typed: ReactNode;
   /** The page answers by itself, so nothing need be sent. */
@@ -14,7 +13,7 @@ interface PartProps {
 }
 
 /** One part of the page: what is asked at the left, what is answered at the right. */
-export function Part({ id, title, says, fields, typed, alive, children }: PartProps) {
+export function Part({ words: { name: id, title, says }, fields, typed, alive, children }: PartProps) {
   return (
     <section className="part pick mt-7 scroll-mt-4 desk:grid desk:grid-cols-[340px_minmax(0,1fr)] desk:gap-7" aria-labelledby={id}>
       <div className="desk:sticky desk:top-4 desk:self-start">

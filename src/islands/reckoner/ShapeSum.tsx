@@ -1,8 +1,9 @@
-import { memo } from 'react';
+import { memo, useDeferredValue } from 'react';
 import type { ShapeSection } from '#core/reckoner/answer-shape.ts';
 
-/** The shape as it is woven, from the foot up: drawn, and told row by row. */
-export const ShapeSum = memo(function ShapeSum({ section: { drawing, runs } }: { section: ShapeSection }) {
+/** The shape as it is woven, from the foot up: drawn, and told row by row, in the frame after the numbers. */
+export const ShapeSum = memo(function ShapeSum({ section }: { section: ShapeSection }) {
+  const { drawing, runs } = useDeferredValue(section);
   if (drawing === undefined) return null;
   const { widthMm, heightMm, shape, warp, rows } = drawing;
   return (

@@ -7,6 +7,7 @@ import { unitsOf, type ReckonerField, type ReckonerForm } from '#core/reckoner/r
 export interface FormHand {
   readonly form: ReckonerForm;
   readonly errors: FieldErrors;
+  /** The same for as long as the form is there. */
   readonly change: (field: ReckonerField, value: string) => void;
 }
 

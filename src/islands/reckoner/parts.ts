@@ -10,6 +10,8 @@ export interface PartWords {
   readonly says: string;
   /** What is told of it on paper. */
   readonly fields: readonly ReckonerField[];
+  /** What is asked in it besides. */
+  readonly besides?: readonly ReckonerField[];
 }
 
 export const PARTS: readonly PartWords[] = [
@@ -20,11 +22,12 @@ export const PARTS: readonly PartWords[] = [
   {
     name: 'sett', title: 'Ends and spacing', says: 'From a width and a loom to warp ends, and whether that yarn suits them.',
     fields: ['width', 'nails', 'every', 'together', 'parity', 'warp-tex', 'draw-in'],
+    besides: ['loom-kind', 'nail-rows', 'warping'],
   },
-  { name: 'cloth', title: 'How much yarn', says: 'Plain cloth of that yarn on those ends.', fields: ['height', 'swatch'] },
+  { name: 'cloth', title: 'How much yarn', says: 'Plain cloth of that yarn on those ends.', fields: ['height', 'swatch'], besides: ['beat', 'weave'] },
   { name: 'soumak', title: 'Soumak', says: 'Ridges of that yarn: over some ends, back under fewer.', fields: ['over', 'back', 'soumak-rows', 'between'] },
   { name: 'rya', title: 'Rya', says: 'Knots of that yarn: what to cut, and the card to cut it on.', fields: ['pile', 'trim', 'knot-strands', 'leg-ends', 'rya-rows', 'edge-ends', 'card'] },
-  { name: 'shape', title: 'Shapes', says: 'In whole ends and rows of that cloth.', fields: ['shape', 'base', 'shape-height', 'radius'] },
+  { name: 'shape', title: 'Shapes', says: 'In whole ends and rows of that cloth.', fields: ['shape', 'base', 'shape-height', 'radius'], besides: ['sides', 'step-ends', 'step-rows'] },
   { name: 'rod', title: 'Rod and cord', says: 'What holds a hanging up.', fields: ['rod-load', 'rod-length', 'rise'] },
-  { name: 'piece', title: 'A whole hanging', says: 'All of the above in one. Amounts are those to have in hand, with a reserve.', fields: ['frame-height', 'frame-width', 'dowel'] },
+  { name: 'piece', title: 'A whole hanging', says: 'All of the above in one. Amounts are those to have in hand, with a reserve.', fields: ['frame-height', 'frame-width', 'dowel'], besides: ['fringe'] },
 ];

@@ -3,7 +3,8 @@ import userEvent from '@testing-library/user-event';
 import { hydrateRoot } from 'react-dom/client';
 import { renderToString } from 'react-dom/server';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
-import { RECKONER_DEFAULTS, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
+import { RECKONER_DEFAULTS, RECKONER_FIELDS, type ReckonerForm } from '#core/reckoner/reckoner-form.ts';
+import { PARTS } from '#islands/reckoner/parts.ts';
 import { Reckoner } from '#islands/reckoner/Reckoner.tsx';
 
 const open = (typed: Partial<ReckonerForm> = {}) => {
@@ -20,6 +21,11 @@ const told = (part: string, name: string): string => {
 
 afterEach(cleanup);
 beforeEach(() => { history.replaceState(null, '', '/reckoner'); });
+
+test('every field of the form is asked in just one part', () => {
+  const asked = PARTS.flatMap(({ fields, besides = [] }) => [...fields, ...besides]);
+  expect(asked.toSorted()).toEqual(RECKONER_FIELDS.filter((field) => field !== 'units').toSorted());
+});
 
 describe('the reckoner', { timeout: 30_000 }, () => {
   test('answers while one types', async () => {
