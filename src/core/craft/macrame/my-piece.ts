@@ -5,7 +5,7 @@
 import { fitPiece, type FittedPiece } from '#core/craft/fit.ts';
 import type { MyPiece, OwnCord } from '#core/craft/fitting/my-piece.ts';
 import type { MacramePiece } from '#core/craft/macrame/piece.ts';
-import type { Asked } from '#core/craft/piece-form/asked.ts';
+import type { AskedMeasure } from '#core/craft/piece-form/asked.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { present } from '#core/craft/reading/present.ts';
@@ -32,7 +32,7 @@ export type CordJudgement =
   | { readonly ok: false; readonly problems: readonly CordFound[] };
 
 const MOST_TYPED = 120;
-const THICKNESS: Asked = { key: 'diameterMm', kind: 'fine', label: 'Thickness' };
+const THICKNESS: AskedMeasure = { key: 'diameterMm', kind: 'fine', label: 'Thickness' };
 
 export const ROD_FIELD = 'rod.diameterMm';
 export const thicknessField = (role: string): string => `cords.${role}.diameterMm`;
@@ -56,8 +56,8 @@ function readThickness({ texts, shown }: TypedCords, field: string, faults: Cord
   const text = textOf(texts, field);
   if (text.trim() === '') return undefined;
   const read = readText(text, THICKNESS, shown);
-  if (read.ok && typeof read.value === 'number') return read.value;
-  faults.push({ field, says: read.ok ? 'Write one length, like 4 or 3/16.' : read.says });
+  if (read.ok) return read.value;
+  faults.push({ field, says: read.says });
   return undefined;
 }
 

@@ -4,6 +4,7 @@ import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
 import { waysToFit, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import type { EndsTogether, LoomKindName, NailRows, FrameLoomPiece, Warping } from '#core/craft/piece.ts';
+import { WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
 import { readText } from '#core/craft/piece-form/field-text.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
@@ -11,7 +12,7 @@ import { present } from '#core/craft/reading/present.ts';
 import type { Outcome, Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, type AskedLength } from './asked-of-mine.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, YARN_KEYS, type AskedLength } from './asked-of-mine.ts';
 import { isTold, judgeWoven, NOTHING_KEPT, wovenFieldOf, type Halfway, type KeptPiece } from './judge-woven.ts';
 import { isOwnYarn, leftOutBy, wayOf, yarnOf, type TypedMine } from './typed-mine.ts';
 import { readTypedWoven } from './typed-woven.ts';
@@ -40,7 +41,7 @@ export function judgeMine(typed: TypedMine, pattern: FrameLoomPiece, kept: KeptP
     return { ok: true, mine, fitted: fitted.value, warnings: placed(fitted.warnings, pattern), halfway: halfway?.value ?? null };
   }
   const own = [...faults].map(([field, says]): MineFound => ({ field, says }));
-  const engine = halfway?.ok === false ? placed(halfway.problems, pattern).filter(({ field }) => !faults.has(field)) : [];
+  const engine = halfway?.ok === false ? placed(halfway.problems, pattern).filter(({ field }) => !isSaid(faults, field)) : [];
   return { ok: false, problems: [...own, ...onePerField(engine)], ...(fitted.ok ? { fitted: fitted.value } : {}) };
 }
 
@@ -58,6 +59,11 @@ function inHerWay(typed: TypedMine, pattern: FrameLoomPiece, mine: MyPiece): { r
   return { mine: present({ ...mine, way: chosen.way }), outcome: chosen.outcome };
 }
 
+/** A yarn whose wraps cannot be read has no thickness: what the engine says of that gap is nothing new. */
+function isSaid(faults: ReadonlyMap<string, string>, field: string): boolean {
+  return faults.has(field) || (field.endsWith('.grist') && faults.has(field.replace(/grist$/, WRAPS.key)));
+}
+
 function onePerField(found: readonly MineFound[]): MineFound[] {
   return [...new Map(found.toReversed().map((one) => [one.field, one])).values()].toReversed();
 }
@@ -67,8 +73,8 @@ function readLength(typed: TypedMine, asked: AskedLength, faults: Map<string, st
   const text = textOf(typed.texts, asked.key);
   if (text.trim() === '') return undefined;
   const read = readText(text, asked, typed.units);
-  if (!read.ok || typeof read.value !== 'number') {
-    faults.set(asked.key, read.ok ? 'Write one length, like 12.5 or 4 7/8.' : read.says);
+  if (!read.ok) {
+    faults.set(asked.key, read.says);
     return undefined;
   }
   const { least, most, below, above } = asked.plausible;
@@ -118,13 +124,13 @@ const endsOf = (text: string): EndsTogether | undefined => (text === '2' ? 2 : t
 /** Her own yarns, read as those of any piece are. */
 function readYarns(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): NonNullable<MyPiece['yarns']> {
   const roles = Object.keys(pattern.yarns).filter((role) => isOwnYarn(yarnOf(typed, role)));
-  if (roles.length === 0) return {};
-  const rows = roles.map((role, index) => ({ id: index + 1, texts: { ...yarnOf(typed, role), role } }));
+  const rows = roles.map((role, id) => ({ id, texts: { ...yarnOf(typed, role), role } }));
   const { piece, faults: found } = readTyped({ units: typed.units, texts: {}, warpYarn: {}, yarns: rows, bands: [] });
-  for (const [field, { says }] of found) {
-    const [, at, key] = /^yarns\.(\d+)\.(.+)$/.exec(field) ?? [];
-    const role = at === undefined ? undefined : roles[Number(at)];
-    if (role !== undefined && key !== undefined) faults.set(`yarns.${role}.${key}`, says);
+  for (const { id, texts } of rows) {
+    for (const key of YARN_KEYS) {
+      const fault = found.get(`yarns.${String(id)}.${key}`);
+      if (fault !== undefined) faults.set(`yarns.${texts.role}.${key}`, fault.says);
+    }
   }
   // Whatever was typed goes on as it is: reckoning it tells what is wrong with it.
   return (piece as { yarns: NonNullable<MyPiece['yarns']> }).yarns;
@@ -140,15 +146,17 @@ const FIELD_OF: Readonly<Record<string, string>> = {
   '/loom/kind': LOOM_KIND.key,
   '/loom/nailRows': NAIL_ROWS.key,
   '/size/widthMm': WIDTH.key,
+  '/warp/endsTogether': ENDS.key,
+  '/warp/parity': ENDS.key,
+  '/warp/endCount': ENDS.key,
 };
 
 function fieldOf(path: string, pattern: FrameLoomPiece): string {
   const known = FIELD_OF[path] ?? wovenFieldOf(path);
   if (known !== undefined) return known;
-  const [, first, role, key] = path.split('/');
-  if (first === 'warp' && (role === 'endsTogether' || role === 'parity' || role === 'endCount')) return ENDS.key;
-  if (first !== 'yarns' || role === undefined || !Object.hasOwn(pattern.yarns, role)) return '';
-  return `yarns.${role}.${key !== undefined && ['strands', 'wrapsPerInch', 'colour', 'label'].includes(key) ? key : 'grist'}`;
+  const [, first, role = '', key = ''] = path.split('/');
+  if (first !== 'yarns' || !Object.hasOwn(pattern.yarns, role)) return '';
+  return `yarns.${role}.${YARN_KEYS.includes(key) ? key : 'grist'}`;
 }
 
 /** With the names of their fields, each sentence once a field. */

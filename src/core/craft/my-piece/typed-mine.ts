@@ -93,8 +93,8 @@ export function inOtherUnits(typed: TypedMine, units: Units): TypedMine {
   const measures = [...LENGTHS, ...wovenAsked(typed)];
   const texts = Object.fromEntries(measures.map((asked) => {
     const text = textOf(typed.texts, asked.key);
-    const read = text.trim() === '' ? null : readText(text, asked, typed.units);
-    return [asked.key, read?.ok === true ? fieldText(read.value, asked, units) : text];
+    const read = readText(text, asked, typed.units);
+    return [asked.key, read.ok ? fieldText(read.value, asked, units) : text];
   }));
   return { ...typed, units, texts: { ...typed.texts, ...texts } };
 }

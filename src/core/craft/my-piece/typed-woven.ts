@@ -1,5 +1,5 @@
 /** What is woven already as it stands in the fields of a form: nothing but text, like the rest of a student's form. */
-import type { Asked } from '#core/craft/piece-form/asked.ts';
+import type { AskedMeasure } from '#core/craft/piece-form/asked.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
 import { isBegun, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
@@ -17,7 +17,7 @@ interface WithTexts extends WithYarns {
 }
 
 /** Every field, for a pattern or a form with these yarn roles. */
-export function wovenAsked({ yarns }: WithYarns): readonly Asked[] {
+export function wovenAsked({ yarns }: WithYarns): readonly AskedMeasure[] {
   return [BANDS_DONE, ROWS, HEIGHT, ...Object.keys(yarns).map(leftAsked)];
 }
 
@@ -38,12 +38,12 @@ const WEAVE_FIRST = 'Say above how far you are: which bands are finished, or how
 
 /** What can be read of it; a sentence in `faults`, by field, for what cannot. Whether the piece has it is not asked here. */
 export function readTypedWoven(typed: WithTexts, faults: Map<string, string>): WovenSoFar {
-  const number = (asked: Asked): number | undefined => {
+  const number = (asked: AskedMeasure): number | undefined => {
     const text = textOf(typed.texts, asked.key);
     if (text.trim() === '') return undefined;
     const read = readText(text, asked, typed.units);
-    if (read.ok && typeof read.value === 'number') return read.value;
-    faults.set(asked.key, read.ok ? 'Write one number, like 12.' : read.says);
+    if (read.ok) return read.value;
+    faults.set(asked.key, read.says);
     return undefined;
   };
   const left = Object.keys(typed.yarns).map((role) => [role, number(leftAsked(role))] as const).filter(([, grams]) => grams !== undefined);
@@ -51,6 +51,6 @@ export function readTypedWoven(typed: WithTexts, faults: Map<string, string>): W
     bandsDone: number(BANDS_DONE) ?? 0,
     ...present({ rows: number(ROWS), heightMm: number(HEIGHT), leftG: left.length === 0 ? undefined : Object.fromEntries(left) as Readonly<Record<string, number>> }),
   };
-  if (woven.heightMm !== undefined && woven.heightMm > 0 && !isBegun(woven) && !faults.has(ROWS.key)) faults.set(HEIGHT.key, WEAVE_FIRST);
+  if ((woven.heightMm ?? 0) > 0 && !isBegun(woven) && !faults.has(ROWS.key)) faults.set(HEIGHT.key, WEAVE_FIRST);
   return woven;
 }

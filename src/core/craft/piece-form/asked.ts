@@ -41,6 +41,8 @@ export type Asked = AskedWords &
   );
 
 export type AskedKind = Asked['kind'];
+/** What is asked for with a number. */
+export type AskedMeasure = Asked & { readonly kind: 'length' | 'fine' | 'yarn' | 'lean' | 'mass' | 'share' | 'number' };
 
 /** An option that stands for its own text. */
 export const option = (text: string, label: string): Option => ({ text, value: text, label });

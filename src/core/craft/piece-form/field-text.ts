@@ -7,10 +7,12 @@ import { MM_PER_INCH, inchesText, toInches } from '#core/units/inches.ts';
 import { parseLength, type LengthUnit } from '#core/units/parse-length.ts';
 import { GRAMS_PER_OUNCE, parseMass } from '#core/units/parse-mass.ts';
 import type { Units } from '#core/units/units.ts';
-import type { Asked } from './asked.ts';
+import type { Asked, AskedMeasure } from './asked.ts';
 
 export type ReadText = { readonly ok: true; readonly value: string | number | boolean | readonly ShapePoint[] } | { readonly ok: false; readonly says: string };
-const no = (says: string): ReadText => ({ ok: false, says });
+/** Of a measure. */
+export type ReadNumber = { readonly ok: true; readonly value: number } | { readonly ok: false; readonly says: string };
+const no = (says: string): ReadText & { readonly ok: false } => ({ ok: false, says });
 
 type LengthKind = 'length' | 'fine' | 'yarn' | 'lean';
 
@@ -120,7 +122,7 @@ function readShare(text: string): ReadText {
   return { ok: true, value: plain.startsWith('-') ? -size : size };
 }
 
-function readLength(text: string, kind: LengthKind, units: Units): { readonly ok: true; readonly value: number } | (ReadText & { readonly ok: false }) {
+function readLength(text: string, kind: LengthKind, units: Units): ReadNumber {
   const below = kind === 'lean' && /^[-−]/.test(text);
   const read = parseLength(below ? text.slice(1).trimStart() : text, UNIT_OF[kind][units]);
   if (!read.ok) return { ok: false, says: read.reason };
@@ -146,6 +148,8 @@ function readPoints(text: string, units: Units): ReadText {
 }
 
 /** Reads a text that is not empty. The sentence, when it cannot be read, is for the person who typed it. */
+export function readText(typed: string, asked: AskedMeasure, units: Units): ReadNumber;
+export function readText(typed: string, asked: Asked, units: Units): ReadText;
 export function readText(typed: string, asked: Asked, units: Units): ReadText {
   const text = typed.trim();
   switch (asked.kind) {

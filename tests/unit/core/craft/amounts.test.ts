@@ -59,6 +59,7 @@ test.each([
   ['band.ridge.rows', '3 rows'],
   ['band.sky.rows', '249 rows'],
   ['band.sky.height', '36 cm'],
+  ['band.sky.yarn', '82 m'],
   ['spacer.width', '32.5 cm'],
   ['spacer.height', '6 cm'],
   ['dowel.length', '38 cm'],
@@ -142,6 +143,10 @@ describe('what went into an amount', () => {
   });
 });
 
+test('yarn that no band is woven with weighs nothing', () => {
+  expect(amount('yarn.spare.mass', { ...PIECE, yarns: { ...PIECE.yarns, spare: { tex: 300 } } })).toMatchObject({ grams: 0 });
+});
+
 test('rows from one shuttle are those of the yarn with most rows', () => {
   // The thicker sand lies in 40 mm, the ground in the other 360: 24 rows of 328 mm go on 8 m, as without it.
   const piece = pieceWith({ yarns: { sand: { tex: 2000 }, ground: { metresPer100g: 180 } }, bands: [{ technique: 'tabby', name: 'dune', yarn: 'sand', heightMm: 40 }, ...PLAIN_PIECE.bands] });
@@ -174,6 +179,7 @@ describe('trust', () => {
     expect(amount('yarn.ground', swatch).howReckoned.trust).toBe('measured');
     expect(amount('yarn.ground.mass', swatch).howReckoned.trust).toBe('label');
     expect(amount('yarn.fringe', swatch).howReckoned.trust).toBe('formula');
+    expect(amount('yarn.ground').howReckoned.trust).toBe('formula');
     // What lies in picks of wrapped yarn is as sure as its swatch; pile is as sure as how thick the yarn was found to lie.
     expect(amount('band.sky.yarn', swatch).howReckoned.trust).toBe('measured');
     expect(amount('band.sky.yarn').howReckoned.trust).toBe('formula');
@@ -181,6 +187,8 @@ describe('trust', () => {
     const wrapped: FrameLoomPiece = { ...PIECE, yarns: { ...PIECE.yarns, fringe: { metresPer100g: 100, wrapsPerInch: 7 } } };
     expect(amount('band.fringe-low.cut', wrapped).howReckoned.trust).toBe('measured');
     expect(amount('band.fringe-low.cut').howReckoned.trust).toBe('formula');
+    // None of it lies in picks, so how close those are beaten does not matter.
+    expect(amount('yarn.fringe', wrapped).howReckoned.trust).toBe('measured');
   });
 
   test('is that of the least certain input', () => {

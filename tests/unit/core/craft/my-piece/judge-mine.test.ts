@@ -1,12 +1,23 @@
 import { describe, expect, test } from 'vitest';
-import { chosenLoom, judgeMine, waysOf, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import { chosenLoom, judgeMine, placed, waysOf, type MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
 import { asPattern, inOtherUnits, leftOutBy, mineOfFields, typeMine, wayOf, withTriedLoom, yarnOf } from '#core/craft/my-piece/typed-mine.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 
 const pattern = await lowTide();
 type Fields = Readonly<Record<string, string>>;
 const typed = (fields: Fields) => mineOfFields((name) => fields[name], pattern);
-const judge = (fields: Fields): MineJudgement => judgeMine(typed(fields), pattern);
+const judge = (fields: Fields, of = pattern): MineJudgement => judgeMine(typed(fields), of);
+/** What she has of her own; throws where something stands in the way. */
+const mineOf = (fields: Fields, of = pattern) => {
+  const judged = judge(fields, of);
+  if (!judged.ok) throw new Error(JSON.stringify(judged.problems));
+  return judged.mine;
+};
+/** Field and sentence of every problem, each as often as it is told. */
+const told = (fields: Fields): string[] => {
+  const judged = judge(fields);
+  return judged.ok ? [] : judged.problems.map(({ field, says: sentence }) => `${field}: ${sentence.replaceAll('\u00a0', ' ')}`);
+};
 const says = (fields: Fields): Readonly<Record<string, string>> => {
   const judged = judge(fields);
   return judged.ok ? {} : Object.fromEntries(judged.problems.map(({ field, says: sentence }) => [field, sentence]));
@@ -21,7 +32,8 @@ describe('lengths as people type them', () => {
   });
 
   test('what stays empty is as in the pattern', () => {
-    expect(judge({ endsTogether: '1', warping: 'zigzag' })).toMatchObject({ ok: true, mine: {} });
+    expect(mineOf({ endsTogether: '1', warping: 'zigzag', kind: 'nailed-frame', insideWidthMm: '  ', 'woven.rows': ' ' })).toEqual({});
+    expect(mineOf({ endsTogether: 'three', warping: 'round and round' })).toEqual({});
   });
 });
 
@@ -35,6 +47,19 @@ describe('impossible looms are told at the field, with what works', () => {
     ['nailPitchMm', '-8', 'A length cannot be below 0.'],
   ])('%s %s', (field, text, sentence) => {
     expect(says({ [field]: text })).toEqual({ [field]: sentence });
+  });
+
+  test.each([['insideHeightMm', '300', 'cm'], ['insideHeightMm', '120', 'in'], ['insideWidthMm', '300', 'cm'], ['nailPitchMm', '2', 'cm']])('%s of %s %s is the last that may be', (field, text, units) => {
+    expect(judge({ [field]: text, units, shown: units }).ok).toBe(true);
+  });
+
+  test('the narrowest frame there may be is only too narrow for this piece', () => {
+    expect(told({ insideWidthMm: '5' })).toEqual(['insideWidthMm: The loom is 50 mm inside. The piece needs 45 cm. No width fits at this spacing.']);
+  });
+
+  test('what else she typed is made up all the same', () => {
+    expect(judge({ nailPitchMm: 'y' })).toMatchObject({ ok: false, fitted: { piece: { size: { widthMm: 400 } } } });
+    expect(judge({ insideWidthMm: '28' })).not.toHaveProperty('fitted');
   });
 
   test('a loom too narrow for the piece says how wide it may be', () => {
@@ -68,8 +93,16 @@ describe('her own yarn', () => {
     expect(says({ 'yarns.water.by': 'tex', 'yarns.water.grist': '0' })['yarns.water.grist']).toContain('works');
   });
 
+  test('a slip is told once, in words for its own field', () => {
+    expect(told({ 'yarns.sand.by': 'wraps', 'yarns.sand.wrapsPerInch': 'many', 'yarns.water.by': 'tex', 'yarns.green.by': 'tex', 'yarns.green.grist': '300', 'yarns.green.strands': 'two' })).toEqual([
+      'yarns.water.grist: Tex is missing.',
+      'yarns.sand.wrapsPerInch: “many” is no number. Write it like 12 or 12.5.',
+      'yarns.green.strands: “two” is no number. Write it like 12 or 12.5.',
+    ]);
+  });
+
   test('a role the pattern does not have is not read', () => {
-    expect(judge({ 'yarns.__proto__.by': 'tex', 'yarns.other.by': 'tex' })).toMatchObject({ ok: true, mine: {} });
+    expect(mineOf({ 'yarns.__proto__.by': 'tex', 'yarns.other.by': 'tex' })).toEqual({});
   });
 });
 
@@ -84,6 +117,34 @@ test('what was kept comes back as it was typed, number for number', () => {
 test('other units keep every length, and leave alone what cannot be read', () => {
   const inches = inOtherUnits(typed({ insideWidthMm: '50,8', nailPitchMm: 'eight' }), 'in');
   expect(inches.texts).toMatchObject({ insideWidthMm: '20', nailPitchMm: 'eight' });
+});
+
+test('the same units leave every text as she typed it', () => {
+  const before = typed({ insideWidthMm: '50,8', nailPitchMm: ' 8 ' });
+  expect(inOtherUnits(before, 'cm').texts).toEqual(before.texts);
+});
+
+describe('a form nothing was kept of', () => {
+  test('shows the pattern’s own loom, and nothing typed', () => {
+    expect(typeMine({}, pattern, 'cm').texts).toEqual({
+      insideWidthMm: '', insideHeightMm: '', nailPitchMm: '', widthMm: '', kind: 'nailed-frame', nailRows: 'both', warping: 'zigzag', endsTogether: '1', way: 'as-it-is',
+      'woven.bandsDone': '0', 'woven.rows': '', 'woven.heightMm': '', ...Object.fromEntries(Object.keys(pattern.yarns).map((role) => [`woven.left.${role}`, ''])),
+    });
+    const rows = { ...pattern, loom: { ...pattern.loom, kind: 'two-row-frame', nailRows: 'inner', nailPitchMm: 5 }, warp: { ...pattern.warp, endsTogether: 2 } } as const;
+    expect(typeMine({}, rows, 'cm').texts).toMatchObject({ kind: 'two-row-frame', nailRows: 'inner', endsTogether: '2' });
+  });
+
+  test('begins each of her yarns with the pattern’s colour and strands', () => {
+    const { yarns } = typeMine({}, { ...pattern, yarns: { ...pattern.yarns, plain: { tex: 300 } } }, 'cm');
+    expect(yarns).toMatchObject({ ridge: { by: 'pattern', colour: '#2f5366', strands: '4' }, water: { strands: '' }, plain: { by: 'pattern', colour: '', strands: '' } });
+  });
+});
+
+test('all as the pattern: what is woven stays woven', () => {
+  const fields = { 'woven.bandsDone': '7', 'woven.rows': '12', 'woven.heightMm': '30', 'woven.left.water': '40', insideWidthMm: '60', 'yarns.water.by': 'tex', 'yarns.water.grist': '300' };
+  const { texts, yarns } = asPattern(typed(fields), pattern);
+  expect(texts).toMatchObject({ insideWidthMm: '', 'woven.bandsDone': '7', 'woven.rows': '12', 'woven.heightMm': '30', 'woven.left.water': '40' });
+  expect(yarns['water']).toMatchObject({ by: 'pattern' });
 });
 
 test('the loom that was tried before buying stands in the form', () => {
@@ -170,6 +231,19 @@ describe('a piece that is half woven', () => {
     expect(measured.picksPerCm).toBeLessThan(rest(WOVEN).rest.picksPerCm);
   });
 
+  test('a height alone does not say what is woven, so she is asked', () => {
+    const asked = 'woven.heightMm: Say above how far you are: which bands are finished, or how many rows are woven.';
+    expect(told({ 'woven.heightMm': '10' })).toEqual([asked]);
+    expect(told({ 'woven.heightMm': '10', 'woven.bandsDone': '1', 'woven.rows': '2' })).toEqual([]);
+    expect(told({ 'woven.heightMm': '0' })).toEqual([]);
+    expect(told({ 'woven.heightMm': '10', 'woven.rows': 'x' })).toEqual(['woven.rows: “x” is no number. Write it like 12 or 12.5.']);
+  });
+
+  test('more finished bands than there are is told at the field, beside the piece that stands', () => {
+    const judged = judge({ 'woven.bandsDone': '15' });
+    expect(judged).toMatchObject({ ok: false, problems: [{ field: 'woven.bandsDone', code: 'E_RANGE' }], fitted: { piece: { size: { widthMm: 400 } } } });
+  });
+
   test('ounces and inches come out as grams and millimetres, and go back into the form as they were typed', () => {
     const fields = { ...WOVEN, 'woven.heightMm': '11 1/2', 'woven.left.water': '1.5', units: 'in', shown: 'in' };
     const { woven } = rest(fields);
@@ -195,10 +269,24 @@ describe('what she chose of her loom', () => {
   });
 
   test('goes into her piece only where it is not the pattern’s own', () => {
-    expect(judge({ kind: 'nailed-frame', endsTogether: '' })).toMatchObject({ ok: true, mine: {} });
+    expect(mineOf({ kind: 'nailed-frame', endsTogether: '' })).toEqual({});
+    const rows = { ...pattern, loom: { ...pattern.loom, kind: 'two-row-frame' as const, nailPitchMm: 20 } };
+    expect(mineOf({ kind: 'two-row-frame', nailRows: 'both' }, rows)).toEqual({});
+    expect(mineOf({ kind: 'two-row-frame', nailRows: 'both' }, { ...rows, loom: { ...rows.loom, nailRows: 'inner' } })).toEqual({ loom: { nailRows: 'both' } });
+    const pairs = { ...pattern, loom: { ...pattern.loom, nailPitchMm: 5 }, warp: { ...pattern.warp, endsTogether: 2 as const } };
+    expect([mineOf({}, pairs), mineOf({ endsTogether: '2' }, pairs), mineOf({ endsTogether: '1', nailPitchMm: '10' }, pairs)]).toEqual([{}, {}, { loom: { nailPitchMm: 10 }, endsTogether: 1 }]);
     const judged = judge({ kind: 'two-row-frame', nailRows: 'inner' });
     expect(judged.ok && judged.mine.loom).toEqual({ kind: 'two-row-frame', nailRows: 'inner' });
   });
+});
+
+test.each([
+  ['/warp/endsTogether', 'endsTogether'], ['/warp/parity', 'endsTogether'], ['/warp/endCount', 'endsTogether'], ['/warp/yarn', ''],
+  ['/yarns/water', 'yarns.water.grist'], ['/yarns/water/tex', 'yarns.water.grist'], ['/yarns/water/strands', 'yarns.water.strands'], ['/yarns/water/wrapsPerInch', 'yarns.water.wrapsPerInch'],
+  ['/yarns/ash/tex', ''], ['/yarns', ''], ['/bands/water/strands', ''], ['/bands', 'way'], ['/loom', 'way'], ['/loom/kind', 'kind'], ['/size/widthMm', 'widthMm'], ['/size/heightMm', ''], ['/rows', 'woven.rows'],
+])('what is said of %s stands at the field “%s”, once', (path, field) => {
+  const problem = { code: 'E_RANGE', path, message: 'Too much.' };
+  expect(placed([problem, problem], pattern)).toEqual([{ field, says: 'Too much.', code: 'E_RANGE' }]);
 });
 
 test('a form that was sent is cut to what a person may type, and is read in the units it was shown in', () => {
@@ -214,6 +302,10 @@ test('a width the whole loom was too narrow for stands in the form only when she
   const tried = (narrower: boolean) => withTriedLoom(before, { inside: '30', spacing: '8', ends: 1, units: 'cm', narrower }, pattern).texts['widthMm'];
   expect(tried(false)).toBe('');
   expect(tried(true)).not.toBe('');
+  const typedWidth = { ...before, texts: { ...before.texts, widthMm: '20' } };
+  expect(withTriedLoom(typedWidth, { inside: '60', spacing: '8', ends: 1, units: 'cm', narrower: false }, pattern).texts).toMatchObject({ insideWidthMm: '60', widthMm: '20' });
+  // A frame of six centimetres holds nothing one would weave.
+  expect(withTriedLoom(before, { inside: '6', spacing: '8', ends: 1, units: 'cm', narrower: true }, pattern).texts['widthMm']).toBe('');
   const inches = withTriedLoom(before, { inside: '16', spacing: '1/2', ends: 1, units: 'in', narrower: false }, pattern);
   expect(inches).toMatchObject({ units: 'in', texts: { insideWidthMm: '16', nailPitchMm: '1/2', endsTogether: '1' } });
 });
