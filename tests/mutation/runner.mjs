@@ -63,7 +63,14 @@ class InProcessRunner {
     switches.hitLimit = hitLimit;
     const tests = await this.#run(wanted ? this.#tests.filter(({ id }) => wanted.has(id)) : this.#tests, !disableBail);
     switches.activeMutant = undefined;
+    this.#firstNext(tests.find(({ status }) => status === TestStatus.Failed));
     return toMutantRunResult(determineHitLimitReached(switches.hitCount, hitLimit) ?? { status: DryRunStatus.Complete, tests });
+  }
+
+  /** What noticed one change most likely notices the next one, which is made close by. @param {TestResult | undefined} killer */
+  #firstNext(killer) {
+    const test = this.#tests.find(({ id }) => id === killer?.id);
+    if (test !== undefined) this.#tests = [test, ...this.#tests.filter((other) => other !== test)];
   }
 
   /** @param {readonly CollectedTest[]} tests @param {boolean} bail ends at the first that fails @returns {Promise<TestResult[]>} */

@@ -32,7 +32,9 @@ const INPUTS: Readonly<Record<string, AnyFigureInput>> = {
   'a braid of yarn told by its grist': knotted({ ...hangingOf([{ technique: 'plain', heightMm: 100 }]), yarns: { main: { tex: 4000 } } }),
 };
 
+/** Of the first piece, through the whole movement; of the others, enough to see in what they differ. */
 const MOMENTS = [0, 0.04, 0.1, 0.18, 0.25, 0.34, 0.42, 0.5, 0.58, 0.66, 0.75, 0.84, 0.92, 0.97, 1];
+const FEW = [0.5, 1];
 
 /** Of the inputs, those of the figure's own craft: any other shows the example. */
 const inputsOf = (kind: string): [string, AnyFigureInput][] => {
@@ -44,11 +46,11 @@ describe.each(FIGURE_KINDS)('the figure "%s" as it was found good', (kind) => {
   const file = new URL(`../../../../fixtures/figures/${kind}.json`, import.meta.url);
 
   it('says the same of each piece, and is drawn alike at every moment', () => {
-    for (const [name, input] of inputsOf(kind)) {
+    for (const [at, [name, input]] of inputsOf(kind).entries()) {
       expectKept(file, name, {
         words: figureWords(kind, input),
         steps: stepsOf(kind, input).map(({ words, until }) => `${until.toFixed(3)} ${words}`),
-        moments: Object.fromEntries(MOMENTS.map((moment) => [`at ${moment.toFixed(2)}`, gistOf(drawFigure(kind, input, moment))])),
+        moments: Object.fromEntries((at === 0 ? MOMENTS : FEW).map((moment) => [`at ${moment.toFixed(2)}`, gistOf(drawFigure(kind, input, moment))])),
       });
     }
   });
