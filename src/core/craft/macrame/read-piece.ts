@@ -141,7 +141,7 @@ function readSections(list: readonly unknown[], path: string, among: readonly [S
   return sections.flatMap((section) => (section === undefined ? [] : [section]));
 }
 
-function readColumn(value: unknown, path: string, findings: Findings): Column | undefined {
+function readColumn(value: unknown, path: string, hasFoot: boolean, findings: Findings): Column | undefined {
   return findings.soundly(() => {
     const fields = Fields.of(value, path, 'A column', findings);
     const column = {
@@ -153,6 +153,7 @@ function readColumn(value: unknown, path: string, findings: Findings): Column | 
     fields.end();
     const inFours = column.sections.some(({ technique }) => technique === 'square-knots' || technique === 'alternating');
     if (inFours && column.cords % 2 === 1) fields.reject('E_PARITY', 'cords', `Square knots are tied with four ends, so folded cords go in pairs. ${String(column.cords + 1)} works.`);
+    if (hasFoot && column.sections.at(-1)?.technique === 'fringe') fields.reject('E_FIT', 'sections', 'A fringe is where the cords end, and the foot goes on with all of them. Make the fringe the last section of the foot.');
     return column;
   });
 }
@@ -208,7 +209,7 @@ export function readPiece(fields: Fields): PieceParts | undefined {
     const rod = readRod(fields);
     const cords = readCords(fields);
     const named = new Set(Object.keys(Object.fromEntries(fields.group('yarns', 'The group of cords').entries())));
-    const columns = fields.list('columns', 'Columns', MOST.columns).flatMap((value, index) => readColumn(value, `/columns/${String(index)}`, findings) ?? []);
+    const columns = fields.list('columns', 'Columns', MOST.columns).flatMap((value, index) => readColumn(value, `/columns/${String(index)}`, fields.has('foot'), findings) ?? []);
     const foot = fields.has('foot') ? readSections(fields.list('foot', 'Foot', MOST.sections), '/foot', FOOT, findings) : [];
     fields.take('foot');
     const parts = { rod, cords, columns, foot: foot as readonly FootSection[], takes: readTakes(fields), ...readAllowances(fields) };

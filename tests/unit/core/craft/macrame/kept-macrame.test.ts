@@ -88,7 +88,7 @@ describe('what is wrong with a knotted piece', () => {
     ['neither knots nor a height', hangingOf([{ technique: 'square-knots' } as never])],
     ['a technique of weaving', hangingOf([{ technique: 'soumak', rows: 3 } as never])],
     ['knots in the foot', { ...BRAID, foot: [{ technique: 'square-knots', knots: 3 }] }],
-    ['a foot after a fringe', { ...hangingOf([{ technique: 'fringe', heightMm: 10 }]), foot: [{ technique: 'plain', heightMm: 10 }] }],
+    ['a foot below columns that end in a fringe', { ...hangingOf([{ technique: 'fringe', heightMm: 10 }]), foot: [{ technique: 'plain', heightMm: 10 }] }],
     ['a foot that goes on after its fringe', { ...BRAID, foot: [{ technique: 'fringe', heightMm: 10 }, { technique: 'plain', heightMm: 10 }] }],
     ['a foot of another kind', { ...BRAID, foot: 'fringe' }],
     ['a cord of no thickness', { ...BRAID, yarns: { main: { diameterMm: 0.4 } } }],

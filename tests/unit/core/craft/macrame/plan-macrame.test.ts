@@ -85,6 +85,7 @@ describe('a knotted piece that cannot be made', () => {
   test.each<[string, unknown, string[]]>([
     ['three folded cords for square knots', hangingOf([{ technique: 'square-knots', knots: 3 }], { cords: 3 }), ['E_PARITY /columns/0/cords']],
     ['a section after a fringe', hangingOf([{ technique: 'fringe', heightMm: 100 }, { technique: 'plain', heightMm: 10 }]), ['E_FIT /columns/0/sections/0']],
+    ['a foot where the cords have ended in a fringe', { ...hangingOf([{ technique: 'fringe', heightMm: 100 }]), foot: [{ technique: 'plain', heightMm: 10 }] }, ['E_FIT /columns/0/sections']],
     ['a role that is not there', hangingOf([{ technique: 'plain', heightMm: 10 }], { yarn: 'gold' }), ['E_ENUM /columns/0/yarn']],
     ['knots and a height', hangingOf([{ technique: 'square-knots', knots: 3, heightMm: 10 } as never]), ['E_ENUM /columns/0/sections/0/heightMm']],
     ['a knot of a tight cord', { ...BRAID, takes: { squareKnot: 9 } }, ['E_RANGE /takes/squareKnot']],
