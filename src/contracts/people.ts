@@ -30,7 +30,10 @@ const ticked = z.string().optional().catch(undefined).transform((value) => value
 export const SignInForm = z.object({ email: mailAddress, password: password(), stay: ticked, to });
 export type SignInInput = z.output<typeof SignInForm>;
 
-export const SignUpForm = z.object({ name, email: mailAddress, password: password(), to });
+/** As her browser tells it, where it does; anything else leaves her at the house's own until she chooses. */
+const browserZone = z.string().max(64).refine(isTimeZone).optional().catch(undefined);
+
+export const SignUpForm = z.object({ name, email: mailAddress, password: password(), timeZone: browserZone, to });
 export type SignUpInput = z.output<typeof SignUpForm>;
 
 export const ForgottenForm = z.object({ email: mailAddress });

@@ -96,7 +96,7 @@ function blocksSeries({ summary, priceMinor, pieceFits, parts }: SeriesInHand): 
 
 function blocksPart({ number, isEmpty, textProblems, unknownAmounts, unknownListAmounts, unknownMedia, uncaptionedVideos }: PartInHand): Missing[] {
   return [
-    ...(isEmpty ? [needed(number, 'text', 'Nothing is written yet.')] : []),
+    ...(isEmpty ? [{ ...needed(number, 'text', 'Nothing is written yet.'), line: 1 }] : []),
     ...textProblems.map(({ line, reason }) => ({ ...needed(number, 'text', `Line ${line}: ${reason}`), line })),
     ...unknownAmounts.map((key) => needed(number, 'text', `The text asks for the amount “${key}”, which the plan of the piece does not have.`)),
     ...unknownListAmounts.map((key) => needed(number, 'list', `The gathering list asks for the amount “${key}”, which the plan of the piece does not have.`)),

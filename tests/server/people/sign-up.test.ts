@@ -21,6 +21,13 @@ describe('opening an account', () => {
     expect(letters.map(({ template }) => template)).toEqual(['confirm-address']);
   });
 
+  test('keeps the time zone of her browser, and the house’s own where none was told', async () => {
+    await signUp(contextOf(null), { ...maud, timeZone: 'America/New_York' });
+    await signUp(contextOf(null), { ...maud, email: addressOf('ada@weavers.example') });
+    const zones = await User.findAll({ order: [['id', 'ASC']] });
+    expect(zones.map(({ timeZone }) => timeZone)).toEqual(['America/New_York', 'UTC']);
+  });
+
   test('keeps the token of the link as a hash only', async () => {
     await signUp(contextOf(null), maud);
     const token = await tokenIn('confirm-address', 'Maud@weavers.example');

@@ -23,14 +23,14 @@ export async function signUp(ctx: Context, input: Omit<SignUpInput, 'to'>): Prom
   const passwordHash = await hashPassword(input.password);
   const mayWrite = (await noteUse(RATE_RULES.letterToAddress, `sign-up ${key}`)).within;
   await withTransaction(async () => {
-    const made = await createUnlessTaken({ email: address, emailKey: key, name: input.name, passwordHash });
+    const made = await createUnlessTaken({ email: address, emailKey: key, name: input.name, passwordHash, ...(input.timeZone !== undefined && { timeZone: input.timeZone }) });
     if (!mayWrite) return;
     if (made === null) await tellOwner(key);
     else await askToConfirm(made, ctx.clock.now());
   });
 }
 
-async function createUnlessTaken(person: Pick<User, 'email' | 'emailKey' | 'name' | 'passwordHash'>): Promise<User | null> {
+async function createUnlessTaken(person: Pick<User, 'email' | 'emailKey' | 'name' | 'passwordHash'> & { readonly timeZone?: string }): Promise<User | null> {
   try {
     return await User.create(person);
   } catch (error) {

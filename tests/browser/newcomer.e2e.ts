@@ -1,0 +1,206 @@
+/**
+ * A teacher who has never been here makes a series in seven parts from a blank page, through the pages alone: piece, parts,
+ * texts, lists, films with captions, timetable, price. A student finds it, buys it and starts.
+ */
+import { randomBytes } from 'node:crypto';
+import { mkdtemp, rm } from 'node:fs/promises';
+import os from 'node:os';
+import path from 'node:path';
+import { expect, test as base, type Browser, type Page } from 'playwright/test';
+import { makeClip } from '../support/clips.ts';
+import { stateOf } from './support/demo-people.ts';
+import { fillText } from './support/lesson-text.ts';
+import { letterTo } from './support/mail-tray.ts';
+import { newPerson, signInHere, type NewPerson } from './support/new-person.ts';
+import { CARD, payWith, untilSeat } from './support/pay.ts';
+import { expectFaultless, test } from './support/test.ts';
+
+interface Part {
+  readonly title: string;
+  readonly words: string;
+  readonly tools: readonly (readonly [name: string, howMuch: string])[];
+  readonly photo?: string;
+  /** The number of the part whose photo it waits for. */
+  readonly after?: number;
+  readonly daysIn?: number;
+  readonly film?: boolean;
+}
+
+const PARTS: readonly Part[] = [
+  { title: 'Read the shore', words: 'Find <Amount of="yarn.ground"/> for the ground.\n\n<Step id="gather">Lay everything out.</Step>', tools: [['Ground yarn', '']] },
+  { title: 'Dress the frame', words: '<Caution title="Mind your wrists">Wind in short turns and rest your wrists.</Caution>\n\n<Step id="tie">Tie on at the left.</Step>\n\n<Step id="wind">Wind <Amount of="ends"/>.</Step>', tools: [['Warp yarn', ''], ['Scissors', '1']], photo: 'Show your warped frame', film: true },
+  { title: 'The first hand', words: '<Step id="tabby">Weave <Amount of="height"/>.</Step>', tools: [['Blunt needle', '1']], after: 2 },
+  { title: 'The ebb line', words: '<Step id="ebb">Change the yarn where the water stood.</Step>', tools: [['Fork', '1']], daysIn: 1, film: true },
+  { title: 'Ridges', words: '<Step id="ridge">Lay the stitch over four, back two.</Step>', tools: [['Blunt needle', '1']], photo: 'Show a ridge from near' },
+  { title: 'The dry sand', words: '<Step id="sand">Weave to the top.</Step>', tools: [['Fork', '1']], after: 5 },
+  { title: 'Cut and hang', words: '<Caution title="Mind the blades">Cut away from your hand.</Caution>\n\n<Step id="cut">Cut the warp and knot it in twos.</Step>', tools: [['Scissors', '1']] },
+];
+
+let folder = '';
+base.beforeAll(async () => { folder = await mkdtemp(path.join(os.tmpdir(), 'fellmark-newcomer-')); });
+base.afterAll(() => rm(folder, { recursive: true }));
+base.setTimeout(420_000);
+base.use({ actionTimeout: 15_000 });
+
+const slugOf = (title: string): string => title.toLowerCase().replaceAll(' ', '-');
+const main = (page: Page) => page.getByRole('main');
+
+/** The steward finds her among the people and gives her a workroom. */
+async function letIn(browser: Browser, { email }: NewPerson, workroom: string): Promise<void> {
+  const office = await browser.newPage({ storageState: stateOf('pell') });
+  await office.goto(`/office/people?q=${encodeURIComponent(email)}`);
+  await main(office).getByRole('link', { name: 'Nell Fane' }).first().click();
+  const prove = main(office).getByRole('link', { name: 'Type my password' });
+  if (await prove.isVisible()) {
+    await prove.click();
+    await office.getByLabel('Password', { exact: true }).fill(process.env['FELLMARK_TEST_PASSWORD'] ?? '');
+    await main(office).getByRole('button').first().click();
+  }
+  await office.getByLabel('Name of the workroom').fill(workroom);
+  await office.getByLabel('Handle').fill(`nell-${randomBytes(3).toString('hex')}`);
+  await main(office).getByRole('button', { name: 'Let in as a teacher' }).click();
+  await expect(main(office).getByRole('link', { name: workroom })).toBeVisible();
+  await office.close();
+}
+
+test('a newcomer builds a series in seven parts, and a student finds, buys and starts it', async ({ page, browser, request }) => {
+  const tag = randomBytes(3).toString('hex');
+  const title = `Strandline ${tag}: a small hanging in seven parts`;
+  const name = `Strandline ${tag}`;
+  const teacher = await newPerson(request);
+  let desk = '';
+
+  await test.step('she is let in, and is told where to begin', async () => {
+    await letIn(browser, teacher, `Room ${tag}`);
+    await page.goto('/sign-in?to=/workroom');
+    await signInHere(page, teacher);
+    await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
+    await main(page).getByRole('link', { name: 'Make a series' }).click();
+    await page.getByLabel('Title').fill(title);
+    await main(page).getByRole('button', { name: 'Make the series' }).click();
+    await expect(page.getByRole('heading', { level: 1, name })).toBeVisible();
+    desk = new URL(page.url()).pathname;
+  });
+
+  await test.step('the piece: three bands, drawn and reckoned as she types', async () => {
+    await page.goto(`${desk}/piece`);
+    await expect(page.locator('astro-island[ssr]')).toHaveCount(0);
+    for (const [label, words] of [['Width', '24'], ['Height', '30'], ['Nail to nail, upright', '50'], ['Nail to nail, along', '8'], ['Tex', '500'], ['Metres in 100 g', '333']] as const) {
+      await main(page).getByLabel(label, { exact: true }).first().fill(words);
+    }
+    await main(page).getByRole('button', { name: 'Save the piece' }).first().click();
+    await expect(page.getByText('The piece is saved.')).toBeVisible();
+  });
+
+  await test.step('seven parts, put in their order', async () => {
+    await page.goto(desk);
+    for (const { title: part } of PARTS) {
+      await page.getByLabel('Put in a part').fill(part);
+      await main(page).getByRole('button', { name: 'Put it in' }).click();
+      await expect(page.getByRole('heading', { level: 3, name: part })).toBeVisible();
+    }
+  });
+
+  for (const [index, part] of PARTS.entries()) {
+    await test.step(`Part ${index + 1}: text, list, photo, day`, async () => {
+      await page.goto(desk);
+      await main(page).getByRole('link', { name: part.title, exact: true }).first().click();
+      const place = new URL(page.url()).pathname;
+      await fillText(page, part.words);
+      await page.keyboard.press('Control+s');
+      await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+      for (const [tool, howMuch] of part.tools) {
+        await page.goto(`${place}/gather`);
+        const add = main(page).getByRole('region', { name: 'Put something on the list' });
+        await add.getByLabel('Name', { exact: true }).fill(tool);
+        if (howMuch !== '') await add.getByLabel('Or how much in words').fill(howMuch);
+        await add.getByRole('button', { name: 'Put it on the list' }).click();
+        await expect(main(page).getByRole('listitem').filter({ hasText: tool }).first()).toBeVisible();
+      }
+      await page.goto(`${place}/settings`);
+      if (index === 0) await page.getByLabel('Free to read').check();
+      if (part.photo !== undefined) {
+        await page.getByLabel('Ask for a photo').check();
+        await page.getByLabel('What it shall show').fill(part.photo);
+      }
+      if (part.after !== undefined) {
+        await page.getByLabel('After you have seen a photo').check();
+        await page.getByLabel('It opens when you say weave on to the photo of').selectOption({ label: `Part ${part.after}, ${PARTS[part.after - 1]?.title}` });
+      }
+      if (part.daysIn !== undefined) {
+        await page.getByLabel('Some days after the seat began').check();
+        await page.getByLabel('How many days').fill(String(part.daysIn));
+      }
+      await main(page).getByRole('button', { name: 'Save', exact: true }).click();
+      await expect(page.getByText('Saved').first()).toBeVisible();
+      if (part.film !== true) return;
+      await page.goto(`${place}/video`);
+      await page.getByTestId('video-chooser').setInputFiles(makeClip(folder, `film-${index + 1}.mp4`, { seconds: 3 }));
+      await expect(page.getByText('All of it is here').or(page.getByText('It is being made ready')).or(main(page).getByRole('link', { name: /Captions/ })).first()).toBeVisible({ timeout: 60_000 });
+    });
+  }
+
+  await test.step('the films are ready, and each gets its captions', async () => {
+    for (const [index, part] of PARTS.entries()) {
+      if (part.film !== true) continue;
+      await page.goto(desk);
+      await main(page).getByRole('link', { name: part.title, exact: true }).first().click();
+      await main(page).getByRole('link', { name: 'Video', exact: true }).click();
+      const captions = main(page).getByRole('link', { name: 'Write the captions' });
+      await expect(captions).toBeVisible({ timeout: 120_000 });
+      await captions.click();
+      await page.getByRole('button', { name: 'Write a line here' }).press('Enter');
+      await page.keyboard.type('See how the thread goes.');
+      await expect(page.getByText(/^Saved \d\d:\d\d/)).toBeVisible({ timeout: 30_000 });
+      await page.goto(`${desk}/videos/${slugOf(part.title)}`);
+      await main(page).getByRole('link', { name: `Part ${index + 1}`, exact: true }).click();
+      await main(page).getByRole('button', { name: /at the head of the text/ }).click();
+      await expect(page.getByRole('textbox', { name: 'Text of this part' })).toContainText('<Video');
+    }
+  });
+
+  await test.step('words and price, then nothing is missing', async () => {
+    await page.goto(desk);
+    await page.getByLabel('Summary').fill('A small hanging in the colours of a shore, for a first frame.');
+    await page.getByLabel('What makes it worth weaving').fill('Each part ends where the eye can rest.');
+    await page.getByLabel('Techniques').fill('tabby');
+    await page.getByLabel('Price of a seat').fill('36');
+    await main(page).getByRole('button', { name: 'Save', exact: true }).click();
+    await expect(page.getByLabel('Price of a seat')).toHaveValue('36.00');
+    await page.goto(`${desk}/before`);
+    await expectFaultless(page);
+    await page.goto(`${desk}/timetable`);
+  });
+
+  await test.step('she publishes', async () => {
+    await page.goto(desk);
+    await main(page).getByRole('button', { name: 'Publish', exact: true }).click();
+    await page.getByRole('dialog').getByRole('button', { name: 'Publish' }).click();
+    await expect(main(page).getByText(/Open to buyers since/)).toBeVisible();
+  });
+
+  await test.step('a student finds it, buys it and starts', async () => {
+    const student = await newPerson(request, 'Ada Quill');
+    const shop = await browser.newPage({ baseURL: new URL(page.url()).origin, viewport: { width: 390, height: 844 } });
+    await shop.goto('/series');
+    await shop.getByRole('link', { name: new RegExp(name) }).first().click();
+    await expect(shop.getByRole('heading', { level: 1, name })).toBeVisible();
+    await expect(shop.getByText('Ground yarn').first()).toBeVisible();
+    await shop.getByRole('button', { name: 'Take a seat' }).click();
+    await signInHere(shop, student);
+    await shop.getByLabel(/^Open the parts to me at once/).check();
+    await shop.getByLabel(/^I know that with the first part/).check();
+    await shop.getByRole('button', { name: 'Take a seat' }).click();
+    await payWith(shop, CARD);
+    await untilSeat(shop, true);
+    await letterTo(request, student.email, `Your seat in ${title}`);
+    await shop.goto('/loom');
+    await shop.goto(`${desk.replace('/workroom', '')}/2`);
+    await expect(shop.getByText(/Wind \d+/)).toBeVisible();
+    await shop.getByRole('checkbox').first().check();
+    await expectFaultless(shop);
+    await shop.goto(`${desk.replace('/workroom', '')}/3`);
+    await expect(shop.getByText(/Part 3 opens when/).first()).toBeVisible();
+    await shop.close();
+  });
+});
