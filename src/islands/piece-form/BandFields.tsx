@@ -69,6 +69,7 @@ function BandActs({ index, count, laterIsUp }: Omit<BandFieldsProps, 'band'>) {
         <ActButton {...up}><Glyph name="up" /></ActButton>
         <ActButton {...down}><Glyph name="down" /></ActButton>
         <ActButton act={{ do: 'copy-band', band: index }} to={`band-${String(index + 1)}`} label={`Copy band ${number}`}><Glyph name="copy" /></ActButton>
+        <ActButton act={{ do: 'split-band', band: index }} to={`band-${String(index)}`} label={`Split band ${number} in two`}><Glyph name="scissors" /></ActButton>
       </span>
       <ActButton act={{ do: 'add-band', after: index }} to={`band-${String(index + 1)}`} className="btn btn-sm"><Glyph name="plus" />Add a band after this</ActButton>
       <ActButton act={{ do: 'take-out-band', band: index }} to="bands" className="btn btn-sm btn-quiet"><Glyph name="takeOut" />Take this band out</ActButton>

@@ -8,6 +8,7 @@ import { BandFields } from './BandFields.tsx';
 import type { BandWords } from './band-words.ts';
 import { ShownContext, useShown, type Shown } from './hands.ts';
 import { Patch } from './Patch.tsx';
+import type { RowGrip } from './use-row-drag.ts';
 import { yarnOf, yarnWords } from './yarn-choices.ts';
 
 export interface BandRowProps {
@@ -24,20 +25,29 @@ export interface BandRowProps {
   readonly wrong: ReadonlyMap<string, string>;
   readonly heed: ReadonlyMap<string, string>;
   readonly onChoose: (id: number) => void;
+  /** Pulled, or where what is pulled would go. */
+  readonly drag: 'lifted' | 'drop-before' | 'drop-after' | null;
+  readonly grip: RowGrip;
 }
 
 const NO_TEXTS: Shown['texts'] = {};
 
 /** A band: its patch of cloth, technique, yarn and height in one line; open, everything it is asked. */
-export const BandRow = memo(function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, wrong, heed, onChoose }: BandRowProps) {
+export const BandRow = memo(function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, wrong, heed, onChoose, drag, grip }: BandRowProps) {
   const { units, yarns } = useShown();
   const shown = useMemo((): Shown => ({ units, yarns, texts: NO_TEXTS, wrong, heed }), [units, yarns, wrong, heed]);
   const isWrong = wrong.size > 0;
   const [beginsOpen] = useState(isOpen || isWrong);
   const yarn = yarnOf(yarns, textOf(band.texts, 'yarn'));
   return (
-    <li id={`band-${String(index)}`}>
-      <details className={isChosen ? 'band on' : 'band'} open={beginsOpen} onFocus={() => onChoose(band.id)} onToggle={(event) => { if (event.currentTarget.open) onChoose(band.id); }}>
+    <li id={`band-${String(index)}`} data-band={index} className={['band', isChosen && 'on', drag].filter(Boolean).join(' ')} onFocus={() => onChoose(band.id)}>
+      <button
+        type="button" className="handle needs-script" aria-label={`Pull band ${String(index + 1)}, or press Alt and an arrow key`} aria-keyshortcuts="Alt+ArrowUp Alt+ArrowDown"
+        onPointerDown={(event) => { grip.down(event, laterIsUp ? count - index : index + 1); }} onPointerMove={grip.move} onPointerUp={grip.up} onPointerCancel={grip.cancel}
+      >
+        <Glyph name="grip" />
+      </button>
+      <details open={beginsOpen} onToggle={(event) => { if (event.currentTarget.open) onChoose(band.id); }}>
         <summary>
           <span className="at num" aria-hidden="true">{index + 1}</span>
           <Patch patch={words?.patch ?? null} colour={yarn === undefined ? undefined : textOf(yarn, 'colour')} id={`patch-${String(band.id)}`} />

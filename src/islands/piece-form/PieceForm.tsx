@@ -2,7 +2,9 @@ import { useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, ty
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import type { Act } from '#core/craft/piece-form/change-typed.ts';
+import { withHeight, type HeldBand } from '#core/craft/piece-form/band-height.ts';
 import { judgeTyped, type Judgement } from '#core/craft/piece-form/judge-typed.ts';
+import { splitBand } from '#core/craft/piece-form/split-band.ts';
 import { textOf, type TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
@@ -75,6 +77,7 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
   const undo = useCallback(() => { tell({ kind: 'undo' }); }, []);
   const redo = useCallback(() => { tell({ kind: 'redo' }); }, []);
   useUndoKeys(undo, redo);
+  const onDrawing = useDrawnHands(tell, choose, typed);
   const hands = useHandsOf(tell, toasts, action, typed);
   const shown = useMemo((): Shown => ({ units, yarns, texts, wrong, heed }), [units, yarns, texts, wrong, heed]);
   useFocusOnFresh(form, state.fresh);
@@ -97,7 +100,7 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
         {isOver && keeping.savedAt === null && <input type="hidden" name="over" value="yes" />}
         <FormHead {...{ series, saved, keeping, summary, judged }} isTried={state.isTried} undo={state.past.length === 0 ? null : undo} redo={state.future.length === 0 ? null : redo} />
         {keeping.behind !== null && <div className="other"><OtherPieceNotice other={keeping.behind} title={series.name} onKeep={keepMine} onTake={takeOther} /></div>}
-        <PieceDrawing cloth={cloth} isOld={!judged.ok && cloth !== null} chosen={bands.findIndex(({ id }) => id === chosen)} units={units} />
+        <PieceDrawing {...{ cloth, made, units, ...onDrawing }} isOld={!judged.ok && cloth !== null} chosen={bands.findIndex(({ id }) => id === chosen)} />
         <div className="fields">
           <SizeAndLoom />
           <WarpFields warpYarn={typed.warpYarn} />
@@ -119,15 +122,31 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
 const NOTHING: readonly [] = [];
 const nameOf = (target: EventTarget): string => (target instanceof HTMLInputElement ? target.name : '');
 
+/** What hands do on the drawing; the same functions as long as the form lives. */
+function useDrawnHands(tell: (event: Parameters<typeof pieceFormAfter>[1]) => void, choose: (id: number) => void, typed: TypedPiece) {
+  const now = useRef(typed);
+  now.current = typed;
+  return useMemo(() => ({
+    onChoose: (index: number) => {
+      const id = now.current.bands[index]?.id;
+      if (id !== undefined) choose(id);
+    },
+    onPull: (held: HeldBand, steps: number) => { tell({ kind: 'replace', typed: withHeight(now.current, held, steps), news: '', run: `pull-${String(held.band)}` }); },
+    onRest: () => { tell({ kind: 'rest' }); },
+  }), [tell, choose]);
+}
+
 /** The same functions as long as the form lives. */
 function useHandsOf(tell: (event: Parameters<typeof pieceFormAfter>[1]) => void, { say }: ReturnType<typeof useToasts>, action: string, typed: TypedPiece): Hands {
   const now = useRef(typed);
-  useEffect(() => { now.current = typed; }, [typed]);
+  now.current = typed;
   return useMemo(() => ({
     action,
     type: (field, text) => { tell({ kind: 'type', field, text }); },
     act: (act) => {
       const before = now.current;
+      const split = act.do === 'split-band' ? splitBand(before, act.band) : null;
+      if (split?.ok === false) { say(split.says); return; }
       tell({ kind: 'act', act });
       const gone = takenOutWords(act);
       if (gone !== null) say(gone, { act: { label: 'Put it back', run: () => { tell({ kind: 'replace', typed: before, news: 'It is back.' }); } } });

@@ -1,11 +1,12 @@
 import { memo } from 'react';
-import { amountOf } from '#core/craft/amounts.ts';
 import type { Found } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
-import { yarnTable } from '#core/gathering/yarn-table.ts';
+import { amountIn } from '#core/craft/frame-loom/amounts.ts';
+import { materials } from '#core/craft/frame-loom/materials.ts';
+import { yarnLines } from '#core/gathering/yarn-lines.ts';
 import { formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { fieldId } from '#islands/ui/field-id.ts';
@@ -48,11 +49,11 @@ export const PiecePlan = memo(function PiecePlan({ made, isOld, warnings, yarns,
 function Numbers({ piece, plan, units, isOld }: { readonly piece: FrameLoomPiece; readonly plan: FrameLoomPlan; readonly units: Units; readonly isOld: boolean }) {
   const rows = plan.bands.reduce((sum, { picks = 0 }) => sum + picks, 0);
   const lines = ROWS.flatMap((key): { label: string; parts: readonly AmountPart[] }[] => {
-    const amount = amountOf(key, piece, plan);
-    return amount.ok ? [{ label: SHORT[key] ?? amount.value.label, parts: formatAmount(amount.value, units) }] : [];
+    const reckoned = amountIn(key, { piece, plan });
+    return typeof reckoned === 'string' ? [] : [{ label: SHORT[key] ?? reckoned.label, parts: formatAmount(reckoned.quantity, units) }];
   });
   const [ends, ...more] = lines;
-  const { lines: yarns } = yarnTable(piece, plan);
+  const { lines: yarns } = yarnLines(materials({ piece, plan }));
   return (
     <>
       {isOld && <p className="small quiet">As it was before.</p>}

@@ -24,7 +24,9 @@ export type PieceFormEvent =
   | { readonly kind: 'type'; readonly field: string; readonly text: string }
   | { readonly kind: 'act'; readonly act: Act }
   /** Another form altogether: put back, brought back, or taken from another window. */
-  | { readonly kind: 'replace'; readonly typed: TypedPiece; readonly news: string }
+  | { readonly kind: 'replace'; readonly typed: TypedPiece; readonly news: string; readonly run?: string }
+  /** The hand lets go: what it does next is a step of its own. */
+  | { readonly kind: 'rest' }
   | { readonly kind: 'undo' | 'redo' }
   | { readonly kind: 'enter' | 'leave'; readonly field: string }
   | { readonly kind: 'try' };
@@ -50,6 +52,10 @@ function newsOf(act: Act, typed: TypedPiece): string {
       return `A band was put in; it is woven ${placeWord(act.after + 1)}.`;
     case 'copy-band':
       return `Band ${String(act.band + 1)} was copied; the copy is woven after it.`;
+    case 'split-band':
+      return `Band ${String(act.band + 1)} is now two.`;
+    case 'move-band':
+      return `Band ${String(act.band + 1)} is now woven ${placeWord(act.to)}.`;
     default:
       return '';
   }
@@ -61,6 +67,7 @@ function freshOf(act: Act, typed: TypedPiece): string | null {
     case 'add-band':
       return `bands.${String(act.after + 1)}.technique`;
     case 'copy-band':
+    case 'split-band':
       return `bands.${String(act.band + 1)}.technique`;
     case 'add-shape':
       return `bands.${String(act.band)}.shapes.${String(typed.bands[act.band]?.shapes.length ?? 0)}.shape`;
@@ -97,13 +104,15 @@ export function pieceFormAfter(state: PieceFormState, event: PieceFormEvent): Pi
       return { ...stepTo(state, changeTyped(state.typed, act), null), inHand: null, fresh: freshOf(act, state.typed), news: newsOf(act, state.typed) };
     }
     case 'replace':
-      return { ...stepTo(state, event.typed, null), news: event.news };
+      return { ...stepTo(state, event.typed, event.run ?? null), news: event.news };
     case 'undo':
       return goBack(state);
     case 'redo':
       return goForth(state);
     case 'enter':
       return { ...state, inHand: event.field };
+    case 'rest':
+      return { ...state, run: null };
     case 'leave':
       return { ...state, run: null, inHand: state.inHand === event.field ? null : state.inHand };
     case 'try':

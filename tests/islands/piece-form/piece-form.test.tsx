@@ -155,6 +155,65 @@ describe('the form on the page', () => {
     expect(document.activeElement?.closest('details')?.hasAttribute('open')).toBe(true);
   });
 
+  const rowOf = (index: number): Element => document.querySelector(`[data-band="${String(index)}"] .handle`) ?? expect.fail('no such row');
+  const slider = (): Element => document.querySelector('[role="slider"]') ?? expect.fail('no square');
+  const chooseDrawn = (index: number): void => { fireEvent.click(document.querySelectorAll('.band-hit')[index] ?? expect.fail('no such band')); };
+
+  test('Alt and an arrow moves the band in hand, as the picture runs, and says so', () => {
+    open();
+    fireEvent.keyDown(rowOf(0), { key: 'ArrowUp', altKey: true });
+    expect(field('bands.1.heightMm').value).toBe('6');
+    expect(screen.getByText('Band 1 is now woven second.')).toBeTruthy();
+    fireEvent.keyDown(rowOf(1), { key: 'ArrowUp', altKey: true });
+    expect(field('bands.1.heightMm').value).toBe('6');
+    fireEvent.keyDown(rowOf(1), { key: 'ArrowDown', altKey: true });
+    expect(field('bands.0.heightMm').value).toBe('6');
+  });
+
+  test('on the drawing a band is chosen by a press, and made higher row by row by keys', () => {
+    open();
+    chooseDrawn(0);
+    const rows = Number(slider().getAttribute('aria-valuenow'));
+    expect(slider().getAttribute('aria-valuetext')).toBe(`6\u00a0cm, ${String(rows)} rows`);
+    fireEvent.keyDown(slider(), { key: 'ArrowUp' });
+    fireEvent.keyDown(slider(), { key: 'ArrowUp', shiftKey: true });
+    expect(slider().getAttribute('aria-valuenow')).toBe(String(rows + 11));
+    fireEvent.keyDown(slider(), { key: 'Home' });
+    expect(slider().getAttribute('aria-valuetext')).toMatch(/, 1 row$/);
+    fireEvent.keyDown(document.body, { key: 'z', ctrlKey: true });
+    expect(field('bands.0.heightMm').value).toBe('6');
+  });
+
+  test('a pull at the square snaps to whole rows, and is one step to undo', () => {
+    open();
+    chooseDrawn(0);
+    const rows = Number(slider().getAttribute('aria-valuenow'));
+    Object.assign(slider(), { setPointerCapture: () => undefined });
+    // The test's browser knows no pointers: what the form reads of one, a mouse has too.
+    for (const [kind, clientY] of [['pointerdown', 300], ['pointermove', 299], ['pointermove', 280], ['pointermove', 250], ['pointerup', 250]] as const) fireEvent(slider(), new MouseEvent(kind, { bubbles: true, clientY }));
+    expect(Number(slider().getAttribute('aria-valuenow'))).toBeGreaterThan(rows);
+    expect(field('bands.0.heightMm').value).not.toBe('6');
+    fireEvent.click(screen.getByLabelText('Undo'));
+    expect(field('bands.0.heightMm').value).toBe('6');
+  });
+
+  test('the band that fills has no square, and says why', () => {
+    open();
+    chooseDrawn(1);
+    expect(document.querySelector('[role="slider"]')).toBeNull();
+    expect(screen.getByText(/This band fills what the others leave/)).toBeTruthy();
+  });
+
+  test('a band is split at its row, and one that cannot be says why', () => {
+    open();
+    fireEvent.click(button('split-band:0'));
+    expect([field('bands.0.heightMm').value, field('bands.1.heightMm').value].map(Number).reduce((sum, cm) => sum + cm, 0)).toBeCloseTo(6, 6);
+    retype('bands.0.heightMm', '0,1');
+    fireEvent.click(button('split-band:0'));
+    expect(screen.getByText('It has one row only.')).toBeTruthy();
+    expect(document.querySelectorAll('.bands > li')).toHaveLength(3);
+  });
+
   test('without script it holds every field, each of its buttons sends it, and the first of them saves', () => {
     const page = new DOMParser().parseFromString(renderToString(<PieceForm {...props} typed={typed} />), 'text/html');
     const names = [...page.querySelectorAll('input[name], select[name]')].map((one) => one.getAttribute('name'));

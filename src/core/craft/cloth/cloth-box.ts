@@ -10,6 +10,8 @@ export interface ClothBox {
   readonly pxPerMm: number;
   /** Which edge of the screen holds the first row. */
   readonly begin: 'head' | 'foot';
+  /** Which edge moves as the cloth grows. */
+  readonly free: 'head' | 'foot';
 }
 
 /** Bare warp between the dowel's loops and the last row. */
@@ -20,13 +22,13 @@ export function hangingBox(piece: WovenPiece, width: number): ClothBox & { reado
   const left = Math.max(6, width * 0.03);
   const dowelTop = Math.max(16, width * 0.13);
   const pxPerMm = (width - 2 * left) / piece.widthMm;
-  return { left, dowelTop, top: dowelTop + WARP_ABOVE_PX, height: wovenHeightMm(piece) * pxPerMm, pxPerMm, begin: piece.turned ? 'head' : 'foot' };
+  return { left, dowelTop, top: dowelTop + WARP_ABOVE_PX, height: wovenHeightMm(piece) * pxPerMm, pxPerMm, begin: piece.turned ? 'head' : 'foot', free: 'foot' };
 }
 
 /** Of a piece in its frame. */
 export function loomBox(piece: WovenPiece, width: number): ClothBox {
   const { inset, pxPerMm, nailsBottom, below, clothHeight } = layOnLoom(piece, width);
-  return { left: inset, top: nailsBottom - below - clothHeight, height: clothHeight, pxPerMm, begin: 'foot' };
+  return { left: inset, top: nailsBottom - below - clothHeight, height: clothHeight, pxPerMm, begin: 'foot', free: 'head' };
 }
 
 export interface BandPlace {

@@ -1,37 +1,20 @@
 /** Weaving on a nailed frame: the first craft of the house. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
-import type { Craft, Material, MadeOf } from '#core/craft/craft.ts';
+import type { Craft, MadeOf } from '#core/craft/craft.ts';
 import { changePiece } from '#core/craft/fitting/change-piece.ts';
 import { tellChanges } from '#core/craft/fitting/tell-changes.ts';
 import { AMOUNTS, amountIn } from '#core/craft/frame-loom/amounts.ts';
 import { EXAMPLE } from '#core/craft/frame-loom/example.ts';
+import { materials } from '#core/craft/frame-loom/materials.ts';
 import { planFrameLoom } from '#core/craft/frame-loom/plan-frame-loom.ts';
 import { readPieceParts } from '#core/craft/frame-loom/read-piece.ts';
-import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
-import type { FrameLoomPlan, WarpPlan } from '#core/craft/plan-types.ts';
-import { gramsInHand } from '#core/craft/purchase.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 
 type Made = MadeOf<FrameLoomPiece, FrameLoomPlan>;
-
-function material(key: string, name: string, yarn: Yarn, plan: WarpPlan): Material {
-  const { label, colour } = yarn;
-  return {
-    key, name, yarn, lengthMm: plan.withMarginMm, grams: gramsInHand(plan),
-    ...(label === undefined ? {} : { label }), ...(colour === undefined ? {} : { colour }), ...(plan.balls === undefined ? {} : { balls: plan.balls }),
-  };
-}
-
-/** Warp first, then the weft yarns in the order in which the piece names them. */
-function materials({ piece, plan }: Made): Material[] {
-  const wefts = Object.entries(piece.yarns).flatMap(([role, yarn]): Material[] => {
-    const planned = plan.yarns[role];
-    return planned === undefined ? [] : [{ ...material(`yarn.${role}`, role, yarn, planned), role }];
-  });
-  return [material('warp', 'Warp', piece.warp.yarn, plan.warp), ...wefts];
-}
 
 function roleOfKey(key: string, piece: FrameLoomPiece): string | undefined {
   const [subject, name, what] = key.split('.');

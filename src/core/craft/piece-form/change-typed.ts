@@ -1,6 +1,7 @@
 /** What hands do to a form beside typing: rows are put in, copied, moved and taken out. The same with script and without. */
 import { bandFields, FILL_KEY } from './asked-of-band.ts';
 import { withStarters } from './field-names.ts';
+import { splitBand } from './split-band.ts';
 import { nextId, textOf, type Texts, type TypedBand, type TypedPiece, type TypedRow } from './typed-piece.ts';
 
 /** Rows are counted from 0, bands in the order they are woven. */
@@ -9,7 +10,9 @@ export type Act =
   | { readonly do: 'look' }
   /** `after` is the band woven before it; −1 weaves it first. */
   | { readonly do: 'add-band'; readonly after: number }
-  | { readonly do: 'copy-band' | 'take-out-band' | 'sooner' | 'later'; readonly band: number }
+  | { readonly do: 'copy-band' | 'split-band' | 'take-out-band' | 'sooner' | 'later'; readonly band: number }
+  /** To be the band of that place. */
+  | { readonly do: 'move-band'; readonly band: number; readonly to: number }
   | { readonly do: 'add-shape'; readonly band: number }
   | { readonly do: 'take-out-shape'; readonly band: number; readonly shape: number }
   | { readonly do: 'add-yarn' }
@@ -28,11 +31,14 @@ export function readAct(text: string): Act | null {
     case 'add-band':
       return { do: name, after: first };
     case 'copy-band':
+    case 'split-band':
     case 'take-out-band':
     case 'sooner':
     case 'later':
     case 'add-shape':
       return { do: name, band: first };
+    case 'move-band':
+      return isCount(second) ? { do: name, band: first, to: second } : null;
     case 'take-out-shape':
       return isCount(second) ? { do: name, band: first, shape: second } : null;
     case 'take-out-yarn':
@@ -51,6 +57,8 @@ export function actText(act: Act): string {
       return `${act.do}:${String(act.after)}`;
     case 'take-out-shape':
       return `${act.do}:${String(act.band)}:${String(act.shape)}`;
+    case 'move-band':
+      return `${act.do}:${String(act.band)}:${String(act.to)}`;
     case 'take-out-yarn':
       return `${act.do}:${String(act.yarn)}`;
     default:
@@ -115,9 +123,12 @@ export function bandInHand(act: Act): number | null {
       return act.band + 1;
     case 'sooner':
       return Math.max(0, act.band - 1);
+    case 'split-band':
     case 'add-shape':
     case 'take-out-shape':
       return act.band;
+    case 'move-band':
+      return act.to;
     default:
       return null;
   }
@@ -133,12 +144,18 @@ export function changeTyped(typed: TypedPiece, act: Act): TypedPiece {
       return { ...typed, bands: addBand(typed, act.after) };
     case 'copy-band':
       return { ...typed, bands: copyBand(bands, act.band) };
+    case 'split-band': {
+      const split = splitBand(typed, act.band);
+      return split.ok ? split.typed : typed;
+    }
     case 'take-out-band':
       return { ...typed, bands: without(bands, act.band) };
     case 'sooner':
       return { ...typed, bands: moved(bands, act.band, act.band - 1) };
     case 'later':
       return { ...typed, bands: moved(bands, act.band, act.band + 1) };
+    case 'move-band':
+      return act.to === act.band ? typed : { ...typed, bands: moved(bands, act.band, act.to) };
     case 'add-shape':
       return { ...typed, bands: changeBand(bands, act.band, (band) => addShape(typed, band)) };
     case 'take-out-shape':
