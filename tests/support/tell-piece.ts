@@ -3,8 +3,8 @@ import { amountKeysOf, amountOf } from '#core/craft/amounts.ts';
 import { craftOf, type Piece, type Plan } from '#core/craft/crafts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { explainPiece } from '#core/craft/show-how/explain.ts';
-import type { WorkingInput } from '#core/craft/show-how/working.ts';
-import type { Problem } from '#core/outcome.ts';
+import type { Working, WorkingInput } from '#core/craft/show-how/working.ts';
+import type { Outcome, Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { thousandths } from './kept.ts';
 
@@ -17,8 +17,7 @@ function inputText({ symbol, value, unit, from, path, source, trust, weighs }: W
 }
 
 /** A working in a line, and one for each thing that goes into it. */
-function workingsOf(piece: unknown): string[] {
-  const workings = explainPiece(piece);
+export function tellWorkings(workings: Outcome<readonly Working[]>): string[] {
   if (!workings.ok) return told(workings.problems);
   return workings.value.flatMap(({ id, formula, value, unit, trust, margin, inputs }) => [
     `${id} = ${short(value)} ${unit}: ${formula} (${trust}${margin === undefined ? '' : `, margin ${short(margin)}`})`,
@@ -48,7 +47,7 @@ export function tellPiece(piece: Piece): object {
     amounts: amountsOf(piece, plan),
     materials: thousandths(craft.materials({ piece, plan })),
     words: [craft.summary({ piece, plan }, 'cm'), craft.size({ piece, plan }, 'cm')],
-    workings: workingsOf(piece),
+    workings: tellWorkings(explainPiece(piece)),
   };
 }
 
