@@ -116,7 +116,7 @@ function readNumber(text: string): number | undefined {
 const noNumber = (text: string, like: string): ReadText => no(`“${text.slice(0, 40)}” is no number. Write it like ${like}.`);
 
 function readShare(text: string): ReadText {
-  const plain = text.replace(/\s*%$/, '').replace(',', '.');
+  const plain = text.replace(/\s*%$/, '').replace(',', '.').replace('−', '-');
   if (!/^-?(?:\d+\.?\d*|\.\d+)$/.test(plain)) return noNumber(text, '2 or 2.5');
   const size = Number(shiftPoint(plain.replace('-', ''), -2));
   return { ok: true, value: plain.startsWith('-') ? -size : size };

@@ -3,6 +3,7 @@ import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { planWoven } from '#core/craft/frame-loom/plan-woven.ts';
 import type { FrameLoomPlan } from '#core/craft/plan-types.ts';
 import type { Problem } from '#core/outcome.ts';
+import { BEAT_BY, SWATCH_BEAT } from './asked-of-piece.ts';
 import { fieldOfPlace } from './field-names.ts';
 import { readTyped, type Fault } from './read-typed.ts';
 import { textOf, type TypedPiece } from './typed-piece.ts';
@@ -46,9 +47,10 @@ function onePerField(found: readonly Found[]): Found[] {
   return [...new Map(found.toReversed().map((one) => [one.field, one])).values()].toReversed();
 }
 
-/** A yarn that cannot be read is told at its own field; what the engine says of the gap that leaves is nothing new. */
+/** A yarn or a swatch that cannot be read is told at its own field; what the engine says of the gap that leaves is nothing new. */
 function hides(faults: ReadonlyMap<string, Fault>, field: string, { yarns }: TypedPiece): boolean {
   if (field === 'yarns') return yarns.some(({ texts }) => textOf(texts, 'role').trim() === '');
+  if (field === BEAT_BY.key) return faults.has(SWATCH_BEAT.key);
   const whole = /^(warp\.yarn|yarns\.\d+)\.(?:role|grist)$/.exec(field)?.[1];
   return whole !== undefined && ['by', 'grist', 'wrapsPerInch'].some((key) => faults.has(`${whole}.${key}`));
 }

@@ -152,6 +152,7 @@ function readBand(reading: Reading, { texts, shapes }: TypedBand, prefix: string
 function readBeat(reading: Reading, texts: Texts): Group | undefined {
   const by = reading.value(texts, BEAT_BY, '');
   if (by === 'ends') return undefined;
+  if (by === undefined) return {};
   if (by === 'comb' || by === 'firm' || by === 'rug') return { picksPerWeftDiameter: FIRMNESS[by] };
   const asked = by === 'swatch' ? SWATCH_BEAT : OWN_BEAT;
   const picks = reading.value(texts, asked, '');

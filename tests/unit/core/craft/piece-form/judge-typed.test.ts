@@ -70,6 +70,11 @@ describe('what a form comes to', () => {
     expect(problems({ ...typing(form, { 'loom.nailPitchMm': '30' }), units: 'in' })).toContainEqual(['loom.nailPitchMm', 'From nail to nail: between 1/16 in and 3 7/8 in works.']);
   });
 
+  test('says once that no rows were counted, and nothing of a beat that was not chosen', () => {
+    expect(problems(typing(form, { 'beat.by': 'swatch' }))).toEqual([['beat.picksPerCm', 'Picks in a centimetre is missing.']]);
+    expect(problems(typing(form, { 'beat.by': '' }))).toEqual([['beat.by', 'How closely the rows lie: choose one.']]);
+  });
+
   test('takes wraps for a yarn that has no label', () => {
     const judged = judgeTyped(typing(form, { 'yarns.0.by': 'wraps', 'yarns.0.wrapsPerInch': '12' }));
     if (!judged.ok) throw new RangeError(JSON.stringify(judged.problems));
