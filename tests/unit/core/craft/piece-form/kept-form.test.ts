@@ -165,8 +165,8 @@ test('what belongs to a choice is asked with it', () => {
     ['grist', 'Tex', 'number', ''], ['grist', 'Metres in 100 g', 'number', ''], ['grist', 'Class, 0 to 7', 'number', 'The class'], ['grist', 'Count', 'text', 'The count'],
   ]);
   expect(['tex', 'metresPer100g'].map((by) => fieldUnit(gristAsked(by), 'cm'))).toEqual(['tex', 'm']);
-  expect((['warp', 'weft'] as const).map((use) => ashenhurstOf(use).standard?.(form))).toEqual([ASHENHURST_K.warp, ASHENHURST_K.weft]);
-  expect(ALLOWANCES.map(({ key, standard }) => [key.replace('allowances.', ''), standard?.(form)])).toEqual([
+  expect((['warp', 'weft'] as const).map((use) => ashenhurstOf(use).standard?.(form.texts))).toEqual([ASHENHURST_K.warp, ASHENHURST_K.weft]);
+  expect(ALLOWANCES.map(({ key, standard }) => [key.replace('allowances.', ''), standard?.(form.texts)])).toEqual([
     ['drawIn', 0.02], ['relaxation', 0.02], ['wetShrinkage', 0], ['topMm', 40], ['bottomMm', 60], ['tailMm', 50], ['loadMm', 8000], ['marginWeft', 0.15], ['marginWarp', 0.1],
   ]);
 });
