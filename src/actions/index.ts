@@ -6,7 +6,8 @@ import { notices } from './notices.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
 import { pieces } from './pieces.ts';
+import { questions } from './questions.ts';
 import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, notices, office, people, pieces, videos, workroom };
+export const server = { bench, checkout, following, notices, office, people, pieces, questions, videos, workroom };

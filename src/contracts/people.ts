@@ -1,6 +1,6 @@
 /** Forms of having an account. The sentences are what a person reads at the field. */
 import { z } from 'astro/zod';
-import { filled } from '#contracts/fields.ts';
+import { filled, ticked } from '#contracts/fields.ts';
 import { parseMailAddress } from '#core/mail-address.ts';
 
 const MISSING_ADDRESS = 'The mail address is missing. Write it like name@saltmarsh.example.';
@@ -23,9 +23,6 @@ const token = z.string().max(100).catch('');
 
 /** Where to go afterwards; judged again where it is used. */
 const to = z.string().max(2_000).optional().catch(undefined);
-
-/** A tick box: absent when it is not ticked. */
-const ticked = z.string().optional().catch(undefined).transform((value) => value !== undefined);
 
 export const SignInForm = z.object({ email: mailAddress, password: password(), stay: ticked, to });
 export type SignInInput = z.output<typeof SignInForm>;

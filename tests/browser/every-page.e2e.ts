@@ -27,6 +27,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/office/jobs': [['pell', '/office/jobs']],
   '/office/log': [['pell', '/office/log']],
   '/office/mail': [['pell', '/office/mail']],
+  '/office/reports': [['pell', '/office/reports']],
   '/office/people': [['pell', '/office/people']],
   '/office/people/[person]': [['pell', ({ person }) => `/office/people/${person}`]],
   '/prove': [['ilse', '/prove']],
@@ -62,6 +63,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/things': [['ilse', '/workroom/things']],
   '/workroom/series/[slug]/lists': [['ilse', '/workroom/series/low-tide/lists']],
   '/workroom/students': [['ilse', '/workroom/students']],
+  '/workroom/questions': [['ilse', '/workroom/questions'], ['wren', '/workroom/questions'], ['teodor', '/workroom/questions']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
   '/workroom/bench/settings': [['ilse', '/workroom/bench/settings'], ['wren', '/workroom/bench/settings']],
 };

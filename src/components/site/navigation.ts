@@ -7,7 +7,7 @@ export type Area = 'public' | 'workroom' | 'office';
 
 export type Place =
   | 'loom' | 'gather' | 'series' | 'reckoner' | 'handbook' | 'notices' | 'account'
-  | 'workroom' | 'bench' | 'workroom-series' | 'students' | 'money'
+  | 'workroom' | 'bench' | 'questions' | 'workroom-series' | 'students' | 'money'
   | 'office' | 'sign-in';
 
 export interface NavLink {
@@ -26,6 +26,8 @@ export interface NavigationFacts {
   series?: { slug: string; toGather?: number };
   /** Photos waiting on the bench. */
   waiting?: number;
+  /** Questions waiting in the inbox. */
+  asked?: number;
 }
 
 const link = (place: Place, href: string, label: string, glyph: GlyphName): NavLink => ({ place, href, label, glyph });
@@ -44,11 +46,14 @@ const counted = (place: NavLink, of: number | undefined, word: string): NavLink 
 
 const bench = (waiting: number | undefined): NavLink => counted(link('bench', '/workroom/bench', 'Bench', 'bench'), waiting, 'waiting');
 
-function insideWorkroom({ person, waiting }: NavigationFacts): NavLink[] {
+const money = link('money', '/workroom/money', 'Money', 'coin');
+
+function insideWorkroom({ person, waiting, asked }: NavigationFacts): NavLink[] {
   const today = { ...workroom, label: 'Today' };
+  const both = [today, bench(waiting), counted(link('questions', '/workroom/questions', 'Questions', 'ask'), asked, 'waiting')];
   const own = link('workroom-series', '/workroom#series', 'Series', 'series');
-  if (!person?.roles.includes('teacher')) return [today, bench(waiting), own];
-  return [today, bench(waiting), own, link('students', '/workroom/students', 'Students', 'people'), link('money', '/workroom/money', 'Money', 'coin')];
+  if (!person?.roles.includes('teacher')) return [...both, own];
+  return [...both, own, link('students', '/workroom/students', 'Students', 'people'), money];
 }
 
 function outside({ person, series: current, waiting }: NavigationFacts): NavLink[] {
@@ -83,6 +88,8 @@ export function accountNavigation({ area, person }: NavigationFacts): NavLink[] 
   const places: NavLink[] = [loom, counted(notices, person?.unread, 'unread')];
   if (roles.includes('teacher') || roles.includes('helper')) places.push(workroom);
   if (roles.includes('steward')) places.push(office);
+  // The bar at the foot of a phone has no room for it.
+  if (area === 'workroom' && roles.includes('teacher')) places.push(money);
   if (area !== 'public') places.push(series);
   return [...places, account];
 }

@@ -28,11 +28,11 @@ export async function putUp(told: PutUp): Promise<boolean> {
   }
 }
 
-/** Puts up what `letter` says, in the same words, under the same key. For letters to people with an account. */
-export async function putUpLetter<T extends TemplateName>(letter: LetterTo<T>, about: { readonly kind: ToldKind; readonly seriesId: number | null }): Promise<boolean> {
+/** Puts up what `letter` says, in the same words, under the same key, also where she wants no letter (`byLetter`). For letters to people with an account. */
+export async function putUpLetter<T extends TemplateName>(letter: LetterTo<T>, about: { readonly kind: ToldKind; readonly seriesId: number | null; readonly byLetter?: boolean }): Promise<boolean> {
   const { userId } = letter.to;
   if (userId === null) return false;
-  return putUp({ ...about, userId, noticeId: null, byLetter: true, dedupeKey: letter.dedupeKey, said: saidIn(letter.template, letter.data) });
+  return putUp({ byLetter: true, ...about, userId, noticeId: null, dedupeKey: letter.dedupeKey, said: saidIn(letter.template, letter.data) });
 }
 
 /** What a letter says without what makes it a letter. Its addresses become paths of this site. */

@@ -33,6 +33,9 @@ export const RATE_RULES = {
   spendLink: { name: 'spend-link', limit: 60, windowSeconds: 3_600 },
   checkout: { name: 'checkout', limit: 10, windowSeconds: 3_600 },
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
+  /** Questions and reports of one person. */
+  question: { name: 'question', limit: 30, windowSeconds: 3_600 },
+  report: { name: 'report', limit: 30, windowSeconds: 3_600 },
   /** Pictures put into texts by one teacher. */
   picture: { name: 'picture', limit: 120, windowSeconds: 3_600 },
   /** Videos begun by one teacher. */

@@ -9,7 +9,7 @@ const helper: NavigationFacts = { area: 'workroom', person: { roles: ['helper'] 
 const steward: NavigationFacts = { area: 'public', person: { roles: ['steward'] } };
 
 /** Every page of the house that may be led to. */
-const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/notices', '/workroom', '/workroom/bench', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
+const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/notices', '/workroom', '/workroom/bench', '/workroom/questions', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
 
 describe('the places in the top beam', () => {
   it('shows a visitor what is open to everybody', () => {
@@ -40,8 +40,8 @@ describe('the places in the top beam', () => {
   });
 
   it('keeps students and money from a helper in the workroom', () => {
-    expect(labels(helper)).toEqual(['Today', 'Bench', 'Series']);
-    expect(labels({ ...teacher, area: 'workroom' })).toEqual(['Today', 'Bench', 'Series', 'Students', 'Money']);
+    expect(labels(helper)).toEqual(['Today', 'Bench', 'Questions', 'Series']);
+    expect(labels({ ...teacher, area: 'workroom' })).toEqual(['Today', 'Bench', 'Questions', 'Series', 'Students', 'Money']);
   });
 
   it('leads a steward to the office, and nobody else', () => {
@@ -56,10 +56,17 @@ describe('the bar at the foot of a phone', () => {
   });
 
   it('never has more than five places, and her account where there is room', () => {
-    for (const facts of [student, teacher, helper, steward, { ...student, series: { slug: 'low-tide' } }]) {
+    for (const facts of [student, teacher, { ...teacher, area: 'workroom' as const }, helper, steward, { ...student, series: { slug: 'low-tide' } }]) {
       expect(breastNavigation(facts).length).toBeLessThanOrEqual(5);
     }
     expect(breastNavigation(student).at(-1)?.place).toBe('account');
+  });
+
+  it('leaves money to the menu of a teacher’s name in the workroom', () => {
+    const inside: NavigationFacts = { ...teacher, area: 'workroom' };
+    expect(breastNavigation(inside).map(({ label }) => label)).toEqual(['Today', 'Bench', 'Questions', 'Series', 'Students']);
+    expect(accountNavigation(inside).map(({ label }) => label)).toContain('Money');
+    expect(accountNavigation(helper).map(({ label }) => label)).not.toContain('Money');
   });
 });
 

@@ -15,6 +15,7 @@ import { createCalendars } from './0012-create-calendars.ts';
 import { createPieceDrafts } from './0013-create-piece-drafts.ts';
 import { createBench } from './0014-create-bench.ts';
 import { createNotices } from './0016-create-notices.ts';
+import { createQuestions } from './0018-create-questions.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 
 export const migrations: readonly Migration[] = [
@@ -33,5 +34,6 @@ export const migrations: readonly Migration[] = [
   createPieceDrafts,
   createBench,
   createNotices,
+  createQuestions,
   createKeptThings,
 ];

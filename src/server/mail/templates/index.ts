@@ -4,6 +4,7 @@ import { verdict } from './bench.ts';
 import { seatBought, seatRefused } from './checkout.ts';
 import { workroomOpened } from './office.ts';
 import { partsOpened } from './openings.ts';
+import { questionAnswered } from './questions.ts';
 import { accountExists, confirmAddress, newPassword, passwordChanged } from './people.ts';
 
 export const TEMPLATES = {
@@ -12,6 +13,7 @@ export const TEMPLATES = {
   'new-password': newPassword,
   'parts-opened': partsOpened,
   'password-changed': passwordChanged,
+  'question-answered': questionAnswered,
   'seat-bought': seatBought,
   'seat-refused': seatRefused,
   verdict,

@@ -2,7 +2,7 @@
 import type { Actor } from '#server/context.ts';
 import { Workroom } from '#server/models/index.ts';
 import { phrasesOfWorkroom } from './phrases-of.ts';
-import { workroomsOf } from './waiting-photos.ts';
+import { workroomsOf } from '#server/policies/workroom.ts';
 
 export interface BenchSettings {
   readonly handle: string;

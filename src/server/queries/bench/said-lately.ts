@@ -2,7 +2,7 @@
 import { QueryTypes } from 'sequelize';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { workroomsOf } from './waiting-photos.ts';
+import { workroomsOf } from '#server/policies/workroom.ts';
 
 export interface HeldOne {
   /** Public id of the photo. */

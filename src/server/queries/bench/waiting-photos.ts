@@ -6,6 +6,7 @@ import { QueryTypes } from 'sequelize';
 import type { MyPiece } from '#core/craft/fit.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
+import { workroomsOf } from '#server/policies/workroom.ts';
 import type { MediaFiles } from '#contracts/media.ts';
 
 export interface WaitingPhoto {
@@ -50,11 +51,6 @@ const SELECT = `
    WHERE ${WAITS} AND s.workroom_id IN (:workrooms)
    ORDER BY p.created_at + INTERVAL w.answer_days DAY, p.id
    LIMIT :limit`;
-
-/** Ids of the workrooms where `actor` sits at the bench. */
-export function workroomsOf(actor: Actor): number[] {
-  return [...(actor.workroomId === null ? [] : [actor.workroomId]), ...actor.helpsInWorkroomIds];
-}
 
 export async function waitingPhotos(actor: Actor, limit = 60): Promise<WaitingPhoto[]> {
   const workrooms = workroomsOf(actor);

@@ -4,7 +4,7 @@ import { DateTime } from 'luxon';
 import { sumsOf, type Sums } from '#core/money/statement.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { mayTeachIn } from '#server/policies/workroom.ts';
+import { mayTeachIn, workroomsOf } from '#server/policies/workroom.ts';
 import { waitingPhotos, type WaitingPhoto } from '#server/queries/bench/waiting-photos.ts';
 import { classOf, type ClassSeries } from './class-of.ts';
 import { ledgerSince } from './ledger.ts';
@@ -30,7 +30,7 @@ export function lastMonday(now: Date, timeZone: string): Date {
 }
 
 export async function today(actor: Actor, now: Date): Promise<Today> {
-  const workrooms = [...(actor.workroomId === null ? [] : [actor.workroomId]), ...actor.helpsInWorkroomIds];
+  const workrooms = workroomsOf(actor);
   const monday = lastMonday(now, actor.timeZone);
   if (workrooms.length === 0) return { waiting: [], series: [], answerDays: null, sold: null, answerHours: [], monday };
   const teaches = actor.workroomId !== null && mayTeachIn(actor, actor.workroomId);
