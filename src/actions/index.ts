@@ -2,6 +2,7 @@
 import { bench } from './bench.ts';
 import { checkout } from './checkout.ts';
 import { following } from './following.ts';
+import { helpers } from './helpers.ts';
 import { notices } from './notices.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
@@ -10,4 +11,4 @@ import { questions } from './questions.ts';
 import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, notices, office, people, pieces, questions, videos, workroom };
+export const server = { bench, checkout, following, helpers, notices, office, people, pieces, questions, videos, workroom };

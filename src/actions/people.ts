@@ -1,6 +1,5 @@
-import type { ActionAPIContext } from 'astro:actions';
 import { AccountForm, ChangePasswordForm, ConfirmForm, EndSessionForm, ForgottenForm, NewPasswordForm, NothingForm, ProveForm, SignInForm, SignUpForm } from '#contracts/people.ts';
-import { knownDeviceCookie, sessionCookie, type Begun } from '#server/auth/sessions.ts';
+import { knownDeviceCookie, sessionCookie } from '#server/auth/sessions.ts';
 import { askNewPassword } from '#server/use-cases/people/ask-new-password.ts';
 import { changePassword } from '#server/use-cases/people/change-password.ts';
 import { confirmAddress } from '#server/use-cases/people/confirm-address.ts';
@@ -14,14 +13,7 @@ import { signUp } from '#server/use-cases/people/sign-up.ts';
 import { updateAccount } from '#server/use-cases/people/update-account.ts';
 import { safeReturn } from '#server/web/gate.ts';
 import { formAction } from './form-action.ts';
-
-/** `stay` keeps the cookie until the session's end; else it goes when the browser is closed. */
-function giveSession(api: ActionAPIContext, { token, endsAt }: Begun, stay: boolean): void {
-  const { name, options } = sessionCookie();
-  api.cookies.set(name, token, { ...options, ...(stay ? { expires: endsAt } : {}) });
-}
-
-const agentOf = (api: ActionAPIContext): string => api.request.headers.get('user-agent') ?? '';
+import { agentOf, giveSession } from './session-cookie.ts';
 
 export const people = {
   signIn: formAction(SignInForm, async ({ stay, to, ...input }, ctx, api) => {

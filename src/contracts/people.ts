@@ -5,7 +5,7 @@ import { parseMailAddress } from '#core/mail-address.ts';
 
 const MISSING_ADDRESS = 'The mail address is missing. Write it like name@saltmarsh.example.';
 
-const mailAddress = filled(MISSING_ADDRESS, 320).transform((typed, check) => {
+export const mailAddress = filled(MISSING_ADDRESS, 320).transform((typed, check) => {
   const outcome = parseMailAddress(typed);
   if (outcome.ok) return outcome.value;
   check.addIssue({ code: z.ZodIssueCode.custom, message: outcome.problems[0]?.message ?? MISSING_ADDRESS });

@@ -29,7 +29,7 @@ export const AnswerForm = z.object({
 export type AnswerInput = z.output<typeof AnswerForm>;
 
 /** Names a question or an answer. */
-export const WordsForm = z.object({ of: ofWhat, id: publicId });
+export const WordsForm = z.object({ of: ofWhat, which: publicId });
 export type WordsInput = z.output<typeof WordsForm>;
 
 export const ChangeWordsForm = WordsForm.extend({ words: written('The words are missing. To take them out, use “Take out”.', MOST) });

@@ -63,13 +63,14 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/things': [['ilse', '/workroom/things']],
   '/workroom/series/[slug]/lists': [['ilse', '/workroom/series/low-tide/lists']],
   '/workroom/students': [['ilse', '/workroom/students']],
+  '/workroom/helpers': [['ilse', '/workroom/helpers'], ['wren', '/workroom/helpers']],
   '/workroom/questions': [['ilse', '/workroom/questions'], ['wren', '/workroom/questions'], ['teodor', '/workroom/questions']],
   '/workroom/bench': [['ilse', '/workroom/bench'], ['teodor', '/workroom/bench']],
   '/workroom/bench/settings': [['ilse', '/workroom/bench/settings'], ['wren', '/workroom/bench/settings']],
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
-const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
+const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/helping/[token]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
 
 test('every page of the program is looked at', () => {
   const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));

@@ -7,7 +7,7 @@ export type Area = 'public' | 'workroom' | 'office';
 
 export type Place =
   | 'loom' | 'gather' | 'series' | 'reckoner' | 'handbook' | 'notices' | 'account'
-  | 'workroom' | 'bench' | 'questions' | 'workroom-series' | 'students' | 'money'
+  | 'workroom' | 'bench' | 'questions' | 'workroom-series' | 'students' | 'money' | 'helpers'
   | 'office' | 'sign-in';
 
 export interface NavLink {
@@ -46,6 +46,7 @@ const counted = (place: NavLink, of: number | undefined, word: string): NavLink 
 
 const bench = (waiting: number | undefined): NavLink => counted(link('bench', '/workroom/bench', 'Bench', 'bench'), waiting, 'waiting');
 
+const helpers = link('helpers', '/workroom/helpers', 'Helpers', 'people');
 const money = link('money', '/workroom/money', 'Money', 'coin');
 
 function insideWorkroom({ person, waiting, asked }: NavigationFacts): NavLink[] {
@@ -88,6 +89,7 @@ export function accountNavigation({ area, person }: NavigationFacts): NavLink[] 
   const places: NavLink[] = [loom, counted(notices, person?.unread, 'unread')];
   if (roles.includes('teacher') || roles.includes('helper')) places.push(workroom);
   if (roles.includes('steward')) places.push(office);
+  if (area === 'workroom') places.push(helpers);
   // The bar at the foot of a phone has no room for it.
   if (area === 'workroom' && roles.includes('teacher')) places.push(money);
   if (area !== 'public') places.push(series);

@@ -49,12 +49,12 @@ export async function lifetimeOf({ id, isSteward }: { readonly id: number; reado
   return roles > 0 ? 'trusted' : 'student';
 }
 
-/** Starts a session for a person whose password was just proved. */
-export async function beginSession(userId: number, kind: keyof typeof LIFETIMES, device: string, now: Date): Promise<Begun> {
+/** Starts a session for a person whose password was proved at `provedAt`, mostly just now. */
+export async function beginSession(userId: number, kind: keyof typeof LIFETIMES, device: string, now: Date, provedAt = now): Promise<Begun> {
   const token = newToken();
   const { idleSeconds, wholeSeconds } = LIFETIMES[kind];
   const endsAt = new Date(now.getTime() + wholeSeconds * 1_000);
-  await lucia.createSession(userId, { endsAt, idleSeconds, provedAt: now, device: device.slice(0, 160) }, { sessionId: hashToken(token) });
+  await lucia.createSession(userId, { endsAt, idleSeconds, provedAt, device: device.slice(0, 160) }, { sessionId: hashToken(token) });
   return { token, endsAt };
 }
 

@@ -5,6 +5,7 @@ export { EmailToken } from './email-token.ts';
 export { Enrolment } from './enrolment.ts';
 export { GatheringItem } from './gathering-item.ts';
 export { HeldVerdict } from './held-verdict.ts';
+export { HelperInvitation } from './helper-invitation.ts';
 export { Job } from './job.ts';
 export { KeptThing } from './kept-thing.ts';
 export { LedgerEntry } from './ledger-entry.ts';

@@ -17,6 +17,11 @@ export function maySitAtBench(actor: Actor | null, workroomId: number): boolean 
   return worksIn(actor, workroomId);
 }
 
+/** The teacher ends anybody's helping in her workroom, who helps her own. */
+export function mayEndHelp(actor: Actor | null, { workroomId, helperId }: { readonly workroomId: number; readonly helperId: number }): boolean {
+  return mayTeachIn(actor, workroomId) || (actor !== null && actor.userId === helperId && actor.helpsInWorkroomIds.includes(workroomId));
+}
+
 export function maySeeOffice(actor: Actor | null): boolean {
   return actor !== null && actor.isSteward;
 }

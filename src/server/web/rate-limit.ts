@@ -36,6 +36,8 @@ export const RATE_RULES = {
   /** Questions and reports of one person. */
   question: { name: 'question', limit: 30, windowSeconds: 3_600 },
   report: { name: 'report', limit: 30, windowSeconds: 3_600 },
+  /** Invitations of one teacher, to whomever. */
+  invitation: { name: 'invitation', limit: 30, windowSeconds: 86_400 },
   /** Pictures put into texts by one teacher. */
   picture: { name: 'picture', limit: 120, windowSeconds: 3_600 },
   /** Videos begun by one teacher. */

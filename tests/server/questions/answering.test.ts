@@ -101,7 +101,7 @@ describe('own words', () => {
   test('are changed by their writer alone, a question only until it is answered', async () => {
     const all = await buildClass();
     const question = await ask(all, all.maud, { to: 'class' });
-    const change = async (who: User, of: 'question' | 'answer', id: string) => changeWords(await contextFor(who), { of, id, words: 'Better words' });
+    const change = async (who: User, of: 'question' | 'answer', id: string) => changeWords(await contextFor(who), { of, which: id, words: 'Better words' });
     for (const who of [all.jonas, all.teacher, await otherTeacher()]) await expect(change(who, 'question', question.publicId)).rejects.toMatchObject({ code: 'NOT_FOUND' });
     await change(all.maud, 'question', question.publicId);
     expect(await question.reload()).toMatchObject({ words: 'Better words', changedAt: expect.any(Date) });
@@ -118,8 +118,8 @@ describe('own words', () => {
     const question = await ask(all, all.maud, { to: 'class' });
     await answer(all.helper, question);
     const { publicId } = await theAnswer();
-    const take = async (who: User, of: 'question' | 'answer', id: string) => takeOutWords(await contextFor(who), { of, id });
-    const put = async (who: User, of: 'question' | 'answer', id: string) => putBackWords(await contextFor(who), { of, id });
+    const take = async (who: User, of: 'question' | 'answer', id: string) => takeOutWords(await contextFor(who), { of, which: id });
+    const put = async (who: User, of: 'question' | 'answer', id: string) => putBackWords(await contextFor(who), { of, which: id });
     for (const who of [all.jonas, all.maud]) await expect(take(who, 'answer', publicId)).rejects.toMatchObject({ code: 'NOT_FOUND' });
     await take(all.helper, 'answer', publicId);
     expect(await countWaitingQuestions(await actorOf(all.teacher))).toBe(1);
@@ -138,7 +138,7 @@ describe('a report', () => {
     const all = await buildClass();
     const question = await ask(all, all.maud, { to: 'class' });
     const pell = await buildUser({ name: 'Pell Harrow', isSteward: true });
-    const report = async (who: User, why = 'Unkind') => reportWords(await contextFor(who), { of: 'question', id: question.publicId, why });
+    const report = async (who: User, why = 'Unkind') => reportWords(await contextFor(who), { of: 'question', which: question.publicId, why });
     await expect(report(all.maud)).rejects.toMatchObject({ code: 'NOT_FOUND' });
     await expect(report(await buildUser())).rejects.toMatchObject({ code: 'NOT_FOUND' });
     await report(all.jonas);
@@ -154,14 +154,14 @@ describe('a report', () => {
     expect(await listReports()).toEqual([]);
     expect(await question.reload()).toMatchObject({ takenOutAt: expect.any(Date) });
     expect(await WordReport.count({ where: { settledById: pell.id } })).toBe(2);
-    await expect(putBackWords(await contextFor(all.maud), { of: 'question', id: question.publicId })).rejects.toMatchObject({ code: 'NOT_FOUND' });
+    await expect(putBackWords(await contextFor(all.maud), { of: 'question', which: question.publicId })).rejects.toMatchObject({ code: 'NOT_FOUND' });
   });
 
   test('may end in the words standing as they are', async () => {
     const all = await buildClass();
     const question = await ask(all, all.maud, { to: 'class' });
     await answer(all.teacher, question);
-    await reportWords(await contextFor(all.jonas), { of: 'answer', id: (await theAnswer()).publicId, why: 'Wrong' });
+    await reportWords(await contextFor(all.jonas), { of: 'answer', which: (await theAnswer()).publicId, why: 'Wrong' });
     const [report] = await listReports();
     await settleReport(await contextFor(await buildUser({ isSteward: true })), { report: report?.publicId ?? '', words: 'stand' });
     expect(await theAnswer()).toMatchObject({ takenOutAt: null });

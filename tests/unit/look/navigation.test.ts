@@ -9,7 +9,7 @@ const helper: NavigationFacts = { area: 'workroom', person: { roles: ['helper'] 
 const steward: NavigationFacts = { area: 'public', person: { roles: ['steward'] } };
 
 /** Every page of the house that may be led to. */
-const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/notices', '/workroom', '/workroom/bench', '/workroom/questions', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
+const pages = ['/', '/series', '/reckoner', '/handbook', '/sign-in', '/sign-up', '/account', '/loom', '/notices', '/workroom', '/workroom/bench', '/workroom/questions', '/workroom/helpers', '/workroom/students', '/workroom/money', '/office', '/series/low-tide/gather'];
 
 describe('the places in the top beam', () => {
   it('shows a visitor what is open to everybody', () => {

@@ -16,6 +16,7 @@ import { createPieceDrafts } from './0013-create-piece-drafts.ts';
 import { createBench } from './0014-create-bench.ts';
 import { createNotices } from './0016-create-notices.ts';
 import { createQuestions } from './0018-create-questions.ts';
+import { createHelperInvitations } from './0019-create-helper-invitations.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 
 export const migrations: readonly Migration[] = [
@@ -35,5 +36,6 @@ export const migrations: readonly Migration[] = [
   createBench,
   createNotices,
   createQuestions,
+  createHelperInvitations,
   createKeptThings,
 ];

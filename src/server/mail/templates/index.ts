@@ -2,6 +2,7 @@
 import type { z } from 'astro/zod';
 import { verdict } from './bench.ts';
 import { seatBought, seatRefused } from './checkout.ts';
+import { helpEnded, helperInvited } from './helpers.ts';
 import { workroomOpened } from './office.ts';
 import { partsOpened } from './openings.ts';
 import { questionAnswered } from './questions.ts';
@@ -10,6 +11,8 @@ import { accountExists, confirmAddress, newPassword, passwordChanged } from './p
 export const TEMPLATES = {
   'account-exists': accountExists,
   'confirm-address': confirmAddress,
+  'help-ended': helpEnded,
+  'helper-invited': helperInvited,
   'new-password': newPassword,
   'parts-opened': partsOpened,
   'password-changed': passwordChanged,

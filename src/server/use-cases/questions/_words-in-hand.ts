@@ -15,11 +15,11 @@ export interface WordsInHand {
 }
 
 /** @throws NOT_FOUND when there are no such words, or when the person who asks may not see them. */
-export async function wordsInHand(ctx: Context, { of, id }: WordsInput): Promise<WordsInHand> {
+export async function wordsInHand(ctx: Context, { of, which: publicId }: WordsInput): Promise<WordsInHand> {
   const actor = signedIn(ctx);
-  const known = of === 'question' ? null : found(await QuestionAnswer.findOne({ where: { publicId: id } }));
+  const known = of === 'question' ? null : found(await QuestionAnswer.findOne({ where: { publicId } }));
   // The question is the lock of everything said to it.
-  const question = found(await Question.findOne({ where: known === null ? { publicId: id } : { id: known.questionId }, lock: true }));
+  const question = found(await Question.findOne({ where: known === null ? { publicId } : { id: known.questionId }, lock: true }));
   const answer = known === null ? null : found(await QuestionAnswer.findByPk(known.id, { lock: true }));
   const lesson = found(await Lesson.findByPk(question.lessonId));
   const { slug, workroomId } = found(await Series.findByPk(lesson.seriesId));
