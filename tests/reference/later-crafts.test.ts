@@ -4,10 +4,10 @@ import { describe, expect, test } from 'vitest';
 import { yarnPerArea } from '#core/craft/crochet/yarn.ts';
 import { agentMass, bathLitres } from '#core/craft/dyeing/bath.ts';
 import { feltingFactor, layoutFor } from '#core/craft/felting/shrinkage.ts';
-import { folkRuleYards, knitYarn } from '#core/craft/knitting/yarn.ts';
+import { folkRuleYards, knitYarn, stitchLength } from '#core/craft/knitting/yarn.ts';
 import { foldedCordLength, gatheringCord, larksHead, leastHalfHitch, leastSquareKnot, sectionedCordLength, squareKnotCord, squareKnotsIn, texFromDiameter } from '#core/craft/macrame/cord.ts';
 import { planPiece } from '#core/craft/plan.ts';
-import { turnsPerMetre } from '#core/craft/spinning/twist.ts';
+import { diameterFromTwist, turnsPerMetre } from '#core/craft/spinning/twist.ts';
 import { expectClose } from './close.ts';
 
 describe('macramé cord', () => {
@@ -99,6 +99,17 @@ test('67: a twist multiplier of 1 is 956.73 turns a metre at 1 tex, 30.25 at Nm 
   expectClose(turnsPerMetre(1, 1), 956.73443, 1e-8);
   expectClose(turnsPerMetre(1, 1000), 30.254599, 1e-8);
   expectClose(turnsPerMetre(3.5, 59.0541247), 435.7469, 1e-6);
+});
+
+test('fibres lie at 45° on a yarn as thick as a turn is long, over π (a turn unrolled is a right-angled triangle)', () => {
+  // A turn every π mm: once round a yarn of 1 mm is π mm, too.
+  expectClose(diameterFromTwist(Math.PI / 4, 1 / Math.PI), 1, 1e-12);
+  // Half a turn in a mm at 30°: 0.57735/1.570796.
+  expectClose(diameterFromTwist(Math.PI / 6, 0.5), 0.3675526, 1e-6);
+});
+
+test('a stitch of five to the centimetre takes 8.2 mm of yarn (Munden 1959: 4.1 over the stitches)', () => {
+  expectClose(stitchLength(5), 0.82, 1e-12);
 });
 
 describe('felting', () => {

@@ -2,6 +2,8 @@ import { describe, expect, it } from 'vitest';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import { FIGURE_KINDS, isFigureKind } from '#core/craft/figures/figure-kinds.ts';
 import { stepAt, stepsOf } from '#core/craft/figures/figure-steps.ts';
+import { shapeColours } from '#core/craft/figures/yarns.ts';
+import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { figureWords } from '#core/craft/figures/figures.ts';
 import { pieceWith, planOf, PLAIN_PIECE } from '../a-piece.ts';
 import { cases } from '../../../../support/random-cases.ts';
@@ -93,13 +95,35 @@ describe('figures', () => {
   });
 
   it('bring a ground of their own when they stand alone', () => {
-    expect(drawFigure('tabby', INPUT, 1, { standalone: true })).toContain('fill="#f0f3f2"');
+    expect(drawFigure('tabby', INPUT, 1, { standalone: true })).toContain('><path d="M0 0H560V270H0z" fill="#f0f3f2"/>');
     expect(drawFigure('tabby', INPUT, 1)).not.toContain('M0 0H560V270');
   });
 
   it('count progress outside of 0 to 1 as its nearer end', () => {
     expect(drawFigure('tabby', INPUT, 7)).toBe(drawFigure('tabby', INPUT, 1));
     expect(drawFigure('tabby', INPUT, -1)).toBe(drawFigure('tabby', INPUT, 0));
+  });
+
+  it('take the colours of the first shapes there are, and of the yarns they are woven in', () => {
+    const shaped = (...shapes: readonly string[]): FrameLoomPiece['bands'][number] => ({
+      technique: 'tabby', yarn: 'ridge', heightMm: 60, ...(shapes.length === 0 ? {} : { shapes: shapes.map((yarn) => ({ shape: 'triangle', yarn, baseMm: 50, heightMm: 40 })) }),
+    });
+    const colours = (...bands: FrameLoomPiece['bands']): string[] => Object.values(shapeColours({ ...INPUT, piece: { ...PIECE, bands } }));
+    expect(colours(shaped(), shaped('sand', 'foam'), shaped('ground'))).toEqual(['#2f5366', '#cdbb94', '#e6e4d8']);
+    expect(colours(shaped('foam'))).toEqual(['#2f5366', '#e6e4d8', '#e6e4d8']);
+    // Without shapes, and in yarns nobody has, in plain colours.
+    expect(colours(shaped())).toEqual(['#93a8a6', '#cdbb94', '#7d854f']);
+    expect(colours(shaped('toString', 'gold'))).toEqual(['#2f5366', '#cdbb94', '#7d854f']);
+  });
+
+  it('show how high the pile of loops stands by their rod, or as it is said', () => {
+    const loops = (measure: object): string => {
+      const band = { technique: 'loop-pile', yarn: 'foam', rows: 3, heightMm: 12, ...measure } as FrameLoomPiece['bands'][number];
+      return figureWords('loop-pile', { ...INPUT, piece: { ...PIECE, bands: [band] } }) + wordsIn(drawFigure('loop-pile', { ...INPUT, piece: { ...PIECE, bands: [band] } }));
+    };
+    // Half round a rod of 10 mm: 15.7 mm.
+    expect(loops({ rodMm: 10 })).toContain('16\u00a0mm');
+    expect(loops({ loopMm: 20 })).toContain('20\u00a0mm');
   });
 
   it('are known by their names only', () => {
