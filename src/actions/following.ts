@@ -1,10 +1,11 @@
-import { CalendarForm, FinishForm, GatheredForm } from '#contracts/following.ts';
+import { CalendarForm, FinishForm, GatheredForm, ReadForm } from '#contracts/following.ts';
 import { MyPieceForm } from '#contracts/my-piece.ts';
 import { TickInput } from '#contracts/ticks.ts';
 import { stepAnchor } from '#core/lesson-text/tree.ts';
 import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
+import { readAnew } from '#server/use-cases/progress/note-reading.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
 import { renewCalendar } from '#server/use-cases/timetable/renew-calendar.ts';
 import { formAction } from './form-action.ts';
@@ -25,6 +26,11 @@ export const following = {
     const { number, next, isLast } = await finishPart(ctx, input);
     if (!input.done) return { to: `/series/${input.series}/${number}#end`, said: `Part ${number} is open again.` };
     return next === null ? { to: '/loom', said: `Part ${number} is done. ${isLast ? 'The piece is off the loom.' : 'You get a letter when the next part opens.'}` } : { to: `/series/${input.series}/${next}`, said: `Part ${number} is done.` };
+  }),
+
+  readAnew: formAction(ReadForm, async (input, ctx) => {
+    const { number } = await readAnew(ctx, input);
+    return { to: `/series/${input.series}/${number}` };
   }),
 
   renewCalendar: formAction(CalendarForm, async ({ series }, ctx) => {

@@ -19,5 +19,9 @@ export type GatheredInput = z.output<typeof GatheredForm>;
 
 export const CalendarForm = z.object({ series: slug });
 
+/** `version` is the text she was shown. */
+export const ReadForm = z.object({ series: slug, lesson: publicId, version: z.coerce.number().int().min(1) });
+export type ReadInput = z.output<typeof ReadForm>;
+
 export const FinishForm = z.object({ series: slug, lesson: publicId, done: z.enum(['yes', 'no']).transform((word) => word === 'yes') });
 export type FinishInput = z.output<typeof FinishForm>;

@@ -16,6 +16,8 @@ const Opens = z.discriminatedUnion('rule', [
   z.object({ rule: z.literal('after-seat'), days: z.number().int().min(0).max(365) }).strict(),
   /** `part` is the number of an earlier part with a checkpoint; none when that one was taken out, so that another must be chosen. */
   z.object({ rule: z.literal('after-verdict'), part: part.optional() }).strict(),
+  /** `part` is the number of an earlier part. */
+  z.object({ rule: z.literal('after-part'), part: part.optional() }).strict(),
 ]);
 
 export const GatheringEntry = z.object({

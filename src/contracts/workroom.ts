@@ -74,12 +74,14 @@ export const LessonSettingsForm = z.object({
   title: words('The title', 120),
   minutes: wholeNumber('Between 1 and 6,000 minutes works.', 1, 6_000),
   isPreview: ticked,
-  rule: z.enum(['at-once', 'on-date', 'after-seat', 'after-verdict']),
+  rule: z.enum(['at-once', 'on-date', 'after-seat', 'after-verdict', 'after-part']),
   /** The teacher's own clock, `YYYY-MM-DDTHH:mm`, in the zone of her workroom. */
   wall: z.string().trim().optional().transform((typed) => typed?.replace(/^(\d{4}-\d{2}-\d{2})\s+(\d{2}:\d{2})$/, '$1T$2')),
   days: z.string().optional(),
   /** Public id of the part whose verdict opens this one. */
   after: z.string().optional(),
+  /** Public id of the part that must be done before this one opens. */
+  afterPart: z.string().optional(),
   asksForPhoto: ticked,
   ask: z.string().trim().max(200, 'At most 200 characters work here.').default(''),
   /** One line for each point. */

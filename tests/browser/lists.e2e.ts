@@ -1,23 +1,13 @@
 /** Gathering lists by keyboard, and what a part's readers are told of changes. In a series of its own, so that nobody else's is touched. */
 import { expect, type Page } from 'playwright/test';
 import { stateOf } from './support/demo-people.ts';
+import { textField } from './support/lesson-text.ts';
+import { makeSeries } from './support/new-series.ts';
 import { expectFaultless, test } from './support/test.ts';
 
 test.use({ storageState: stateOf('ilse') });
 
 const inMain = (page: Page) => page.getByRole('main');
-
-async function makeSeries(page: Page, ...parts: string[]): Promise<string> {
-  await page.goto('/workroom/series/new');
-  await page.getByLabel('Title').fill(`Neap tide ${Date.now().toString(36)}`);
-  await inMain(page).getByRole('button', { name: 'Make the series' }).click();
-  for (const part of parts) {
-    await page.getByLabel('Put in a part').fill(part);
-    await page.getByLabel('Put in a part').press('Enter');
-    await expect(page.getByRole('link', { name: part, exact: true })).toBeVisible();
-  }
-  return new URL(page.url()).pathname;
-}
 
 async function openList(page: Page, series: string, part: string): Promise<void> {
   await page.goto(series);
@@ -80,4 +70,33 @@ test.describe('without script', () => {
     await page.getByRole('button', { name: 'Fill it in' }).click();
     await expect(page.locator('#add-line').getByLabel('Name')).toHaveValue(thing);
   });
+});
+
+test('who has read a part is told quietly what its teacher changed since, until she says that she has read it', async ({ page, browser }) => {
+  test.setTimeout(120_000);
+  const said = `Keep the label of each yarn (${Date.now().toString(36)}).`;
+  const student = await (await browser.newContext({ storageState: stateOf('maud'), viewport: { width: 390, height: 844 } })).newPage();
+  const part = `${new URL(process.env['FELLMARK_TEST_URL'] ?? '').origin}/series/low-tide/1`;
+  await student.goto(part);
+  await expect(student.getByText(/Changed since you read it/)).toHaveCount(0);
+
+  await page.goto('/workroom/series/low-tide');
+  await page.getByRole('link', { name: 'Gather and plan', exact: true }).click();
+  await textField(page).focus();
+  await page.keyboard.press('Control+End');
+  await page.keyboard.type(`\n\n${said}`);
+  await inMain(page).getByRole('button', { name: 'Save', exact: true }).click();
+  await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+  await page.goto('/workroom/series/low-tide');
+  await inMain(page).getByRole('button', { name: 'Publish the changes of Part 1' }).press('Enter');
+  await expect(page.getByText('Part 1 is published.').first()).toBeVisible();
+
+  await student.goto(part);
+  await student.getByText('Changed since you read it: one passage').press('Enter');
+  await expect(student.getByRole('region', { name: 'What changed' }).getByText(said)).toBeVisible();
+  await expectFaultless(student);
+  await student.getByRole('button', { name: 'I have read it' }).press('Enter');
+  await expect(student.getByText(/Changed since you read it/)).toHaveCount(0);
+  await expect(student.getByRole('main').getByText(said)).toBeVisible();
+  await student.context().close();
 });

@@ -21,10 +21,10 @@ export function partFlag(series: SeriesFor, part: PartFor, progress: PartInHand,
   return undefined;
 }
 
-/** What a part that is not open waits for, with the part whose photo it is. */
+/** What a part that is not open waits for, with the part that comes before it. */
 export function openingOf(series: SeriesFor, part: PartFor) {
   const standing = part.access.may === 'wait' ? part.access.standing : ({ open: true } as const);
-  const before = !standing.open && standing.until === 'verdict' ? series.parts.find(({ publicId }) => publicId === standing.lesson) : undefined;
+  const before = !standing.open && standing.until !== 'date' ? series.parts.find(({ publicId }) => publicId === standing.lesson) : undefined;
   return {
     standing,
     awaited: before === undefined ? undefined : { number: before.number, ask: before.checkpoint?.ask ?? null },

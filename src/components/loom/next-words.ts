@@ -81,7 +81,7 @@ function wordsOf({ seat, next, step, timeZone }: NextFacts, part: PartOnLoom, he
 
 /** The part whose photo a closed part waits for. */
 export function awaitedBy(seat: SeatOnLoom, { standing }: Pick<PartOnLoom, 'standing'>): { number: number; ask: string | null } | undefined {
-  if (standing.open || standing.until !== 'verdict') return undefined;
+  if (standing.open || standing.until === 'date') return undefined;
   const before = seat.parts.find(({ publicId }) => publicId === standing.lesson);
   return before === undefined ? undefined : { number: before.number, ask: before.checkpoint?.ask ?? null };
 }

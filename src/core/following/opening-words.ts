@@ -4,7 +4,7 @@ import type { Standing } from '#core/timetable/opening.ts';
 
 export interface OpeningFacts {
   readonly standing: Standing;
-  /** The part whose photo it waits for, where it does. */
+  /** The part it waits for, where it does, and what its photo shall show. */
   readonly awaited?: { readonly number: number; readonly ask: string | null } | undefined;
   readonly teacher: string;
   readonly timeZone: string;
@@ -24,6 +24,7 @@ function thingShown(ask: string | null): string | undefined {
 export function opensWhen({ standing, awaited, teacher, timeZone }: OpeningFacts): string {
   if (standing.open) return '';
   if (standing.until === 'date') return `opens on ${dayWords(standing.opensAt, timeZone)} at ${clockWords(standing.opensAt, timeZone)}`;
+  if (standing.until === 'part') return awaited === undefined ? 'opens later' : `opens when Part ${awaited.number} is done`;
   const shown = awaited === undefined ? undefined : thingShown(awaited.ask);
   if (shown !== undefined) return `opens when ${teacher} has seen ${shown}`;
   return awaited === undefined ? `opens when ${teacher} says so` : `opens when ${teacher} has looked at your photo of Part ${awaited.number}`;
@@ -33,6 +34,7 @@ export function opensWhen({ standing, awaited, teacher, timeZone }: OpeningFacts
 export function opensShort({ standing, awaited, timeZone }: OpeningFacts): string {
   if (standing.open) return '';
   if (standing.until === 'date') return `Opens ${dayWords(standing.opensAt, timeZone)}`;
+  if (awaited !== undefined && standing.until === 'part') return `Opens when Part ${awaited.number} is done`;
   return awaited === undefined ? 'Opens later' : `Opens after your photo of Part ${awaited.number}`;
 }
 

@@ -5,8 +5,10 @@
 export interface PartOpening {
   /** 1 for the first part. */
   readonly number: number;
-  /** The part whose verdict it waits for; `taken-out` when that one is no longer there. */
+  /** The part it waits for; `taken-out` when that one is no longer there. */
   readonly opensAfterPart: number | 'taken-out' | null;
+  /** What it waits for there: that the photo has its verdict, or only that the part is done. */
+  readonly waitsFor: 'verdict' | 'done';
   readonly hasCheckpoint: boolean;
   /** Of a part that opens on a date. */
   readonly opensAt: Date | null;
@@ -22,13 +24,13 @@ export function openingFaults(parts: readonly PartOpening[]): OpeningFault[] {
   return parts.flatMap((part) => [waitsInVain(part, parts), opensTooEarly(part, parts)].flatMap((says) => (says === null ? [] : [{ part: part.number, says }])));
 }
 
-function waitsInVain({ number, opensAfterPart: awaited }: PartOpening, parts: readonly PartOpening[]): string | null {
+function waitsInVain({ number, opensAfterPart: awaited, waitsFor }: PartOpening, parts: readonly PartOpening[]): string | null {
   if (awaited === null) return null;
   if (awaited === 'taken-out') return 'It waits for a part that was taken out. Choose another part, or let it open in another way.';
-  if (awaited === number) return 'It waits for its own photo, so nobody could ever open it.';
+  if (awaited === number) return waitsFor === 'done' ? 'It waits for itself, so nobody could ever open it.' : 'It waits for its own photo, so nobody could ever open it.';
   if (awaited > number) return `It waits for Part ${awaited}, which comes later, so nobody could ever open it.`;
   const earlier = parts.find((part) => part.number === awaited);
-  return earlier?.hasCheckpoint === true ? null : `It waits for a verdict on Part ${awaited}, which asks for no photo.`;
+  return waitsFor === 'done' || earlier?.hasCheckpoint === true ? null : `It waits for a verdict on Part ${awaited}, which asks for no photo.`;
 }
 
 function opensTooEarly({ number, opensAt }: PartOpening, parts: readonly PartOpening[]): string | null {

@@ -2,7 +2,7 @@
  * The days on which the parts of a series open to one seat, real or imagined: what a student's calendar shows, and what
  * a teacher sees who asks what somebody meets that starts on a day of her choice.
  */
-import { openingMoment, type OpeningRule } from '#core/timetable/opening.ts';
+import { awaitedPart, openingMoment, type OpeningRule } from '#core/timetable/opening.ts';
 
 const DAY_MS = 86_400_000;
 
@@ -12,6 +12,7 @@ export interface PartToOpen {
   readonly title: string;
   readonly opens: OpeningRule;
   readonly isPreview: boolean;
+  readonly asksForPhoto: boolean;
 }
 
 export type OpeningDay = PartToOpen & (
@@ -23,12 +24,16 @@ export type OpeningDay = PartToOpen & (
    * opens, and answered in the time the teacher promises; null where nobody can say.
    */
   | { readonly when: 'verdict'; readonly after: number | null; readonly earliest: Date | null }
+  /** When part `after` is done. `earliest`: if that is the day on which it opens, with the answer to its photo where it asks for one. */
+  | { readonly when: 'part'; readonly after: number | null; readonly earliest: Date | null }
 );
 
 export interface SeatInTime {
   readonly seatStartedAt: Date;
   /** By public id of a lesson, when its photo had the verdict *weave on*. */
   readonly wovenOnAt: ReadonlyMap<string, Date>;
+  /** By public id of a lesson, when it was done. */
+  readonly doneAt: ReadonlyMap<string, Date>;
   /** Days in which the teacher promises an answer. */
   readonly answerDays: number;
   /** A photo not shown yet is shown no earlier. */
@@ -47,14 +52,16 @@ function dayOf(part: PartToOpen, earlier: readonly OpeningDay[], seat: SeatInTim
   const at = openingMoment(part.opens, seat);
   if (at !== null) return at <= seat.seatStartedAt ? { ...part, when: 'from-the-start' } : { ...part, when: 'at', at };
   // Only an earlier part can be waited for; of another nobody can say when.
-  const awaited = earlier.find(({ publicId }) => part.opens.rule === 'after-verdict' && publicId === part.opens.lesson);
+  const awaited = earlier.find(({ publicId }) => publicId === awaitedPart(part.opens));
   const shown = awaited === undefined ? null : earliestOf(awaited, seat);
-  const earliest = shown === null ? null : new Date(Math.max(shown.getTime(), seat.now.getTime()) + seat.answerDays * DAY_MS);
-  return { ...part, when: 'verdict', after: awaited?.number ?? null, earliest };
+  const when = part.opens.rule === 'after-part' ? 'part' : 'verdict';
+  const answer = when === 'verdict' || awaited?.asksForPhoto === true ? seat.answerDays * DAY_MS : 0;
+  const earliest = shown === null ? null : new Date(Math.max(shown.getTime(), seat.now.getTime()) + answer);
+  return { ...part, when, after: awaited?.number ?? null, earliest };
 }
 
 /** The first moment at which a part can be open; null where nobody can say. */
 export function earliestOf(day: OpeningDay, { seatStartedAt }: Pick<SeatInTime, 'seatStartedAt'>): Date | null {
   if (day.when === 'at') return day.at;
-  return day.when === 'verdict' ? day.earliest : seatStartedAt;
+  return day.when === 'from-the-start' ? seatStartedAt : day.earliest;
 }

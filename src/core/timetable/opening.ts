@@ -1,6 +1,6 @@
 /**
- * When a part opens for one student. A teacher chooses one of four rules for each part; the answer depends only on
- * when the seat started, what was said of the student's photos, and the time now.
+ * When a part opens for one student. A teacher chooses one of five rules for each part; the answer depends only on
+ * when the seat started, what was said of the student's photos, which parts are done, and the time now.
  */
 import { DateTime, IANAZone } from 'luxon';
 
@@ -10,19 +10,23 @@ export type OpeningRule =
   | { readonly rule: 'on-date'; readonly wall: string; readonly zone: string }
   | { readonly rule: 'after-seat'; readonly days: number }
   /** `lesson` is the public id of an earlier part with a checkpoint. */
-  | { readonly rule: 'after-verdict'; readonly lesson: string };
+  | { readonly rule: 'after-verdict'; readonly lesson: string }
+  /** `lesson` is the public id of an earlier part; it is done when the student says so, or by its verdict. */
+  | { readonly rule: 'after-part'; readonly lesson: string };
 
 export interface SeatFacts {
   readonly seatStartedAt: Date;
   /** Public ids of the lessons whose checkpoint has the verdict *weave on*. */
   readonly wovenOn: ReadonlySet<string>;
+  /** Public ids of the lessons that are done, by the student's word or by their verdict. */
+  readonly done: ReadonlySet<string>;
   readonly now: Date;
 }
 
 export type Standing =
   | { readonly open: true }
   | { readonly open: false; readonly until: 'date'; readonly opensAt: Date }
-  | { readonly open: false; readonly until: 'verdict'; readonly lesson: string };
+  | { readonly open: false; readonly until: 'verdict' | 'part'; readonly lesson: string };
 
 const MINUTE_MS = 60_000;
 const DAY_MS = 86_400_000;
@@ -57,10 +61,10 @@ function changeBetween(clock: IANAZone, from: number, to: number): number {
 }
 
 /**
- * The moment at which a part with `rule` opens to one seat; null while it waits for a verdict. `wovenOnAt` tells by public
- * id of a lesson when its checkpoint had the verdict *weave on*. A date that is none counts as open from the start.
+ * The moment at which a part with `rule` opens to one seat; null while it waits for a verdict or for another part. `wovenOnAt`
+ * tells by public id of a lesson when its checkpoint had the verdict *weave on*, `doneAt` when it was done. A date that is none counts as open from the start.
  */
-export function openingMoment(rule: OpeningRule, seat: { readonly seatStartedAt: Date; readonly wovenOnAt: ReadonlyMap<string, Date> }): Date | null {
+export function openingMoment(rule: OpeningRule, seat: { readonly seatStartedAt: Date; readonly wovenOnAt: ReadonlyMap<string, Date>; readonly doneAt: ReadonlyMap<string, Date> }): Date | null {
   switch (rule.rule) {
     case 'at-once':
       return seat.seatStartedAt;
@@ -70,12 +74,20 @@ export function openingMoment(rule: OpeningRule, seat: { readonly seatStartedAt:
       return new Date(seat.seatStartedAt.getTime() + rule.days * DAY_MS);
     case 'after-verdict':
       return seat.wovenOnAt.get(rule.lesson) ?? null;
+    case 'after-part':
+      return seat.doneAt.get(rule.lesson) ?? null;
   }
 }
 
 /** Whether a part with `rule` is open to the student of `facts`, and if not, what it waits for. */
-export function standingOf(rule: OpeningRule, { seatStartedAt, wovenOn, now }: SeatFacts): Standing {
+export function standingOf(rule: OpeningRule, { seatStartedAt, wovenOn, done, now }: SeatFacts): Standing {
   if (rule.rule === 'after-verdict') return wovenOn.has(rule.lesson) ? { open: true } : { open: false, until: 'verdict', lesson: rule.lesson };
-  const opensAt = openingMoment(rule, { seatStartedAt, wovenOnAt: new Map() });
+  if (rule.rule === 'after-part') return done.has(rule.lesson) ? { open: true } : { open: false, until: 'part', lesson: rule.lesson };
+  const opensAt = openingMoment(rule, { seatStartedAt, wovenOnAt: new Map(), doneAt: new Map() });
   return opensAt === null || rule.rule === 'at-once' || opensAt <= now ? { open: true } : { open: false, until: 'date', opensAt };
+}
+
+/** The part that a rule waits for; undefined for one that goes by the clock. */
+export function awaitedPart(rule: OpeningRule): string | undefined {
+  return rule.rule === 'after-verdict' || rule.rule === 'after-part' ? rule.lesson : undefined;
 }

@@ -12,10 +12,10 @@ export interface OutOfOrder {
 
 /**
  * One for each part that somebody who starts at `seatStartedAt` could open before a part in front of it. A verdict is
- * given the day the photo can be shown: whoever waits may always wait longer.
+ * given the day the photo can be shown, a part done the day it opens: whoever waits may always wait longer.
  */
 export function outOfOrder(parts: readonly PartToOpen[], seatStartedAt: Date): OutOfOrder[] {
-  const seat = { seatStartedAt, wovenOnAt: new Map(), answerDays: 0, now: seatStartedAt };
+  const seat = { seatStartedAt, wovenOnAt: new Map(), doneAt: new Map(), answerDays: 0, now: seatStartedAt };
   const opens = openingDays(parts, seat).filter(({ isPreview }) => !isPreview).map((day) => ({ number: day.number, at: earliestOf(day, seat) }));
   return opens.flatMap(({ number, at }, index) => {
     const before = opens.slice(0, index).reduce<{ number: number; at: Date | null } | null>((latest, one) => (one.at !== null && (latest?.at == null || one.at > latest.at) ? one : latest), null);

@@ -16,6 +16,10 @@ export function ruleWords(rule: OpeningRule, numberOf: (publicId: string) => num
       const moment = instantOfWall(rule.wall, rule.zone);
       return moment === null ? 'on a date that is none' : `on ${dayWords(moment, rule.zone)} at ${clockWords(moment, rule.zone)}`;
     }
+    case 'after-part': {
+      const number = numberOf(rule.lesson);
+      return number === undefined ? 'after a part that was taken out' : `when Part ${number} is done`;
+    }
     case 'after-verdict': {
       const number = numberOf(rule.lesson);
       return number === undefined ? 'after a photo of a part that was taken out' : `after you say weave on to the photo of Part ${number}`;

@@ -1,6 +1,6 @@
 /** The short films of a shipped series: drawn frame by frame from their storyboards and the pattern piece. */
 import { mkdtemp, rm, stat } from 'node:fs/promises';
-import { parse as parseYaml } from 'yaml';
+import { load as parseYaml } from 'js-yaml';
 import type { Piece, Plan } from '#core/craft/crafts.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import type { MediaFile } from '#contracts/media.ts';

@@ -10,7 +10,7 @@ import { join } from 'node:path';
 import { Readable } from 'node:stream';
 import { pipeline } from 'node:stream/promises';
 import sharp from 'sharp';
-import { parse } from 'yaml';
+import { load } from 'js-yaml';
 import { StoryboardFile } from '#contracts/storyboard.ts';
 import type { Chapter, Cue } from '#core/captions/cues.ts';
 import { FRAME, drawFrame } from '#core/captions/draw-frame.ts';
@@ -40,7 +40,7 @@ const KEY_FRAME_EVERY = 2 * FRAMES_PER_SECOND;
 
 /** Reads a storyboard file. Throws with every problem named: storyboards ship with the program or are checked before. */
 export function readStoryboard(yaml: string): Storyboard {
-  return StoryboardFile.parse(parse(yaml));
+  return StoryboardFile.parse(load(yaml));
 }
 
 /** Makes `<name>.mp4`, `.vtt`, `.chapters.vtt` and `.jpg` in `folder`, which must exist. */

@@ -10,6 +10,7 @@ export { Job } from './job.ts';
 export { KeptThing } from './kept-thing.ts';
 export { LedgerEntry } from './ledger-entry.ts';
 export { Lesson } from './lesson.ts';
+export { LessonRead } from './lesson-read.ts';
 export { LessonVersion } from './lesson-version.ts';
 export { LessonVisit } from './lesson-visit.ts';
 export { LetterChoice } from './letter-choice.ts';

@@ -2,10 +2,10 @@
 import { readdirSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
 import { beforeEach, describe, expect, test } from 'vitest';
-import { stringify } from 'yaml';
 import type { WrittenSeriesFile } from '#contracts/series-folder.ts';
 import { config } from '#server/config.ts';
 import { Job, Lesson, Media, PatternPiece, Series, SeriesMedia } from '#server/models/index.ts';
+import { listToYaml } from '#core/series-folder/list-as-yaml.ts';
 import { bringInSeries } from '#server/use-cases/series-folder/bring-in-series.ts';
 import { contextFor, type TestContext } from '../../support/context.ts';
 import { buildUser, buildWorkroom } from '../../support/factories.ts';
@@ -24,7 +24,7 @@ beforeEach(async () => {
 });
 
 const LIST: WrittenSeriesFile = { title: 'Low Tide', craft: 'frame-loom', techniques: [], level: 'beginner', lessons: [{ file: '01-wind.mdx', title: 'Wind', minutes: 10, opens: { rule: 'at-once' } }] };
-const listing = (more: Partial<WrittenSeriesFile> = {}): MadeEntry => ({ name: 'series.yaml', bytes: Buffer.from(stringify({ ...LIST, ...more })) });
+const listing = (more: Partial<WrittenSeriesFile> = {}): MadeEntry => ({ name: 'series.yaml', bytes: Buffer.from(listToYaml({ ...LIST, ...more })) });
 const LESSON: MadeEntry = { name: '01-wind.mdx', bytes: Buffer.from('Wind it.') };
 const GOOD = [listing(), LESSON];
 

@@ -1,7 +1,7 @@
 // The handbook's pages: whole, within their length, and pointing only at what is there.
 import { readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { parse } from 'yaml';
+import { load as parse } from 'js-yaml';
 import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { HANDBOOK_TOPICS, neighboursOf, pagesByTopic } from '#core/handbook/reading-order.ts';
 import { isTableName } from '#components/handbook/tables.ts';

@@ -1,7 +1,7 @@
 // The series that ship with the program: complete enough to teach from, and told the way the loom side needs them.
 import { existsSync, readdirSync, readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { parse } from 'yaml';
+import { load as parse } from 'js-yaml';
 import { LOW_TIDE } from '#components/handbook/pattern.ts';
 import { SeriesFile } from '#contracts/series-folder.ts';
 import { amountOf } from '#core/craft/amounts.ts';

@@ -18,6 +18,7 @@ import { createNotices } from './0016-create-notices.ts';
 import { createQuestions } from './0018-create-questions.ts';
 import { createHelperInvitations } from './0019-create-helper-invitations.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
+import { createLessonReads } from './0021-create-lesson-reads.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -38,4 +39,5 @@ export const migrations: readonly Migration[] = [
   createQuestions,
   createHelperInvitations,
   createKeptThings,
+  createLessonReads,
 ];

@@ -119,7 +119,8 @@ export async function myLoom(actor: Actor, now: Date): Promise<MyLoom> {
       const own = parts.filter(({ enrolmentId }) => enrolmentId === seat.enrolmentId);
       const keys = ticks.filter(({ enrolmentId }) => enrolmentId === seat.enrolmentId).map(({ itemKey }) => itemKey);
       const wovenOn = new Set(own.filter((part) => part.wovenOn === 1).map(({ publicId }) => publicId));
-      return { ...seat, mine: mine ?? {}, parts: own.map((part, index) => partOnLoom(part, index + 1, keys, standingOf(part.opens, { seatStartedAt: seat.startedAt, wovenOn, now }))) };
+      const done = new Set(own.filter((part) => part.wovenOn === 1 || part.finishedAt !== null).map(({ publicId }) => publicId));
+      return { ...seat, mine: mine ?? {}, parts: own.map((part, index) => partOnLoom(part, index + 1, keys, standingOf(part.opens, { seatStartedAt: seat.startedAt, wovenOn, done, now }))) };
     }),
   };
 }

@@ -35,6 +35,11 @@ const WOVEN_ON = `
    WHERE p.enrolment_id IN (:seats) AND p.verdict = 'weave-on'
    GROUP BY p.enrolment_id, l.public_id`;
 
+const FINISHED = `
+  SELECT v.enrolment_id AS enrolmentId, l.public_id AS publicId, v.finished_at AS at
+    FROM lesson_visits v JOIN lessons l ON l.id = v.lesson_id
+   WHERE v.enrolment_id IN (:seats) AND v.finished_at IS NOT NULL`;
+
 /** Ids of active seats after `afterId`, in order, at most `most`. */
 export async function activeSeatsAfter(afterId: number, most: number): Promise<number[]> {
   const rows = await sequelize.query<{ id: number }>(`SELECT id FROM enrolments WHERE state = 'active' AND id > :afterId ORDER BY id LIMIT :most`, { replacements: { afterId, most }, type: QueryTypes.SELECT });
@@ -45,13 +50,14 @@ export async function activeSeatsAfter(afterId: number, most: number): Promise<n
 export async function unmarkedOpenings(seats: readonly number[], now: Date): Promise<Map<number, OpenPart[]>> {
   if (seats.length === 0) return new Map();
   const asked = { replacements: { seats: [...seats], now }, type: QueryTypes.SELECT } as const;
-  const [candidates, woven] = await Promise.all([sequelize.query<CandidateRow>(CANDIDATES, asked), sequelize.query<WovenRow>(WOVEN_ON, asked)]);
+  const [candidates, woven, finished] = await Promise.all([sequelize.query<CandidateRow>(CANDIDATES, asked), sequelize.query<WovenRow>(WOVEN_ON, asked), sequelize.query<WovenRow>(FINISHED, asked)]);
   const open = new Map<number, OpenPart[]>();
   for (const { enrolmentId, startedAt, isPreview, opens, ...part } of candidates) {
     const rule: OpeningRule = isPreview === 1 ? { rule: 'at-once' } : opens;
-    const wovenOnAt = new Map(woven.filter((row) => row.enrolmentId === enrolmentId).map(({ publicId, at }) => [publicId, at]));
-    if (!standingOf(rule, { seatStartedAt: startedAt, wovenOn: new Set(wovenOnAt.keys()), now }).open) continue;
-    const openedAt = openingMoment(rule, { seatStartedAt: startedAt, wovenOnAt }) ?? now;
+    const ofSeat = (rows: readonly WovenRow[]): [string, Date][] => rows.filter((row) => row.enrolmentId === enrolmentId).map(({ publicId, at }) => [publicId, at]);
+    const [wovenOnAt, doneAt] = [new Map(ofSeat(woven)), new Map([...ofSeat(woven), ...ofSeat(finished)])];
+    if (!standingOf(rule, { seatStartedAt: startedAt, wovenOn: new Set(wovenOnAt.keys()), done: new Set(doneAt.keys()), now }).open) continue;
+    const openedAt = openingMoment(rule, { seatStartedAt: startedAt, wovenOnAt, doneAt }) ?? now;
     open.set(enrolmentId, [...(open.get(enrolmentId) ?? []), { ...part, openedAt }]);
   }
   return open;

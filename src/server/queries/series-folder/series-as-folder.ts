@@ -1,10 +1,10 @@
 /** A series as plain files: its present draft, with all that its teacher can set. What is left out is told in the list of columns in its test. */
-import { stringify } from 'yaml';
 import type { MediaDetail, MediaFile } from '#contracts/media.ts';
 import type { GatheringEntry, PictureEntry, VideoEntry, WrittenSeriesFile } from '#contracts/series-folder.ts';
 import { captionsToVtt } from '#core/captions/web-vtt.ts';
 import { plainSlug } from '#core/lesson-text/slugs.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
+import { listToYaml } from '#core/series-folder/list-as-yaml.ts';
 import { GatheringItem, Lesson, Media, PatternPiece, SeriesMedia, type Series } from '#server/models/index.ts';
 
 export interface FolderFile {
@@ -43,7 +43,7 @@ export async function seriesAsFolder(series: Series, { withFilms }: { readonly w
     pictures: media.pictures,
   };
   return [
-    { name: 'series.yaml', content: stringify(written, { lineWidth: 0 }) },
+    { name: 'series.yaml', content: listToYaml(written) },
     ...(piece === null ? [] : [{ name: 'piece.json', content: `${JSON.stringify(piece.data, null, 2)}\n` }]),
     ...texts,
     ...media.files,
@@ -55,9 +55,9 @@ function numbered(index: number, words: string, otherwise: string, most: number)
 }
 
 function opensIn(rule: OpeningRule, lessons: readonly Lesson[]): WrittenSeriesFile['lessons'][number]['opens'] {
-  if (rule.rule !== 'after-verdict') return rule;
+  if (rule.rule !== 'after-verdict' && rule.rule !== 'after-part') return rule;
   const index = lessons.findIndex(({ publicId }) => publicId === rule.lesson);
-  return { rule: 'after-verdict', ...(index >= 0 && { part: index + 1 }) };
+  return { rule: rule.rule, ...(index >= 0 && { part: index + 1 }) };
 }
 
 function gatheringEntry({ kind, name, amountKey, amountText, standIn, untilPart, note, lookOut, getFrom }: GatheringItem): GatheringEntry {

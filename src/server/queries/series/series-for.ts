@@ -4,7 +4,7 @@
  */
 import { QueryTypes } from 'sequelize';
 import type { CraftName } from '#core/craft/crafts.ts';
-import { standingOf, type OpeningRule, type Standing } from '#core/timetable/opening.ts';
+import { standingOf, type OpeningRule, type SeatFacts, type Standing } from '#core/timetable/opening.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
@@ -96,7 +96,8 @@ export async function seriesFor(actor: Actor | null, slug: string, now: Date): P
   const rows = await sequelize.query<PartRow>(PARTS, { replacements: { seriesId: row.id, enrolmentId: row.enrolmentId ?? 0 }, type: QueryTypes.SELECT });
   const visible = mayLookAfter ? rows : rows.filter(({ publishedVersionId }) => publishedVersionId !== null);
   const wovenOn = new Set(rows.filter((part) => part.wovenOn === 1).map(({ publicId }) => publicId));
-  const parts = visible.map((part, index) => partFor(actor, row, part, index + 1, wovenOn, now));
+  const done = new Set(rows.filter((part) => part.wovenOn === 1 || part.finishedAt !== null).map(({ publicId }) => publicId));
+  const parts = visible.map((part, index) => partFor(actor, row, part, index + 1, { wovenOn, done, now }));
   const behind = mayLookAfter ? [] : rows.slice(rows.findLastIndex(({ publishedVersionId }) => publishedVersionId !== null) + 1);
   const toCome = behind.map(({ title, opensAt }, index) => ({ number: parts.length + index + 1, title, notBefore: opensAt }));
   return { ...presentRow(row), parts, toCome };
@@ -111,8 +112,8 @@ function presentRow(row: SeriesRow): Omit<SeriesFor, 'parts' | 'toCome'> {
   };
 }
 
-function partFor(actor: Actor | null, series: SeriesRow, part: PartRow, number: number, wovenOn: ReadonlySet<string>, now: Date): PartFor {
-  const standing: Standing | null = series.startedAt === null ? null : standingOf(part.opens, { seatStartedAt: series.startedAt, wovenOn, now });
+function partFor(actor: Actor | null, series: SeriesRow, part: PartRow, number: number, facts: Omit<SeatFacts, 'seatStartedAt'>): PartFor {
+  const standing: Standing | null = series.startedAt === null ? null : standingOf(part.opens, { seatStartedAt: series.startedAt, ...facts });
   const access = lessonAccess(actor, {
     workroomId: series.workroomId,
     seriesPublished: series.state === 'published',

@@ -49,7 +49,7 @@ export async function seriesInHand(series: Series): Promise<SeriesRead> {
   const openings = partOpenings(lessons);
   const parts = drafts.map(({ lesson, text, list }, index): PartInHand => {
     return {
-      ...(openings[index] ?? { number: index + 1, opensAfterPart: null, hasCheckpoint: false, opensAt: null }),
+      ...(openings[index] ?? { number: index + 1, opensAfterPart: null, waitsFor: 'verdict', hasCheckpoint: false, opensAt: null }),
       title: lesson.title,
       isPreview: lesson.isPreview,
       isEmpty: lesson.draftSource.trim() === '',

@@ -1,6 +1,7 @@
 /** The timetable of a whole series as a student would meet it who starts on a given day. For its teacher. */
 import { DateTime } from 'luxon';
 import { openingDays, type OpeningDay } from '#core/timetable/opening-days.ts';
+import { outOfOrder, type OutOfOrder } from '#core/timetable/out-of-order.ts';
 import { instantOfWall } from '#core/timetable/opening.ts';
 import type { Actor } from '#server/context.ts';
 import { Lesson, Series, Workroom } from '#server/models/index.ts';
@@ -15,6 +16,8 @@ export interface PlannedTimetable {
   /** The day that was asked for is none, so today was taken. */
   readonly notDated: boolean;
   readonly days: readonly OpeningDay[];
+  /** Parts that somebody who starts on that day could open before one in front of them. */
+  readonly early: readonly OutOfOrder[];
 }
 
 /**
@@ -26,19 +29,20 @@ export async function planTimetable(actor: Actor, slug: string, asked: string | 
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
   const [workroom, lessons] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
-    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['publicId', 'title', 'opens', 'isPreview'] }),
+    Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['publicId', 'title', 'opens', 'isPreview', 'checkpoint'] }),
   ]);
   const { timeZone, answerDays } = workroom;
   const today = DateTime.fromJSDate(now, { zone: timeZone }).toISODate() ?? now.toISOString().slice(0, 10);
   const wished = asked === null ? null : instantOfWall(`${asked}T09:00`, timeZone);
   const start = asked !== null && wished !== null ? { date: asked, at: wished } : { date: today, at: instantOfWall(`${today}T09:00`, timeZone) ?? now };
-  const parts = lessons.map(({ publicId, title, opens, isPreview }, index) => ({ publicId, number: index + 1, title, opens, isPreview }));
+  const parts = lessons.map(({ publicId, title, opens, isPreview, checkpoint }, index) => ({ publicId, number: index + 1, title, opens, isPreview, asksForPhoto: checkpoint !== null }));
   return {
     series: { slug, title: series.title },
     timeZone,
     answerDays,
     start,
     notDated: asked !== null && asked !== '' && wished === null,
-    days: openingDays(parts, { seatStartedAt: start.at, wovenOnAt: new Map(), answerDays, now: start.at }),
+    days: openingDays(parts, { seatStartedAt: start.at, wovenOnAt: new Map(), doneAt: new Map(), answerDays, now: start.at }),
+    early: outOfOrder(parts, start.at),
   };
 }

@@ -1,4 +1,5 @@
 import { Op } from 'sequelize';
+import { awaitedPart } from '#core/timetable/opening.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { found } from '#server/errors.ts';
@@ -61,7 +62,7 @@ async function tellStudent(photo: ProgressPhoto, { verdict, words, notes, byId }
 /** The parts that waited for this verdict. They are put on record as told, so that no second letter says they are open. */
 async function openedBy({ enrolmentId, lessonId, verdictAt }: ProgressPhoto, lessons: readonly Lesson[]): Promise<Lesson[]> {
   const shown = lessons.find(({ id }) => id === lessonId);
-  const opened = lessons.filter(({ opens, isPreview }) => !isPreview && opens.rule === 'after-verdict' && opens.lesson === shown?.publicId);
+  const opened = lessons.filter(({ opens, isPreview }) => !isPreview && shown !== undefined && awaitedPart(opens) === shown.publicId);
   await PartOpening.bulkCreate(opened.map(({ id }) => ({ enrolmentId, lessonId: id, toldBy: 'verdict' as const, openedAt: verdictAt ?? new Date() })), { ignoreDuplicates: true });
   return opened;
 }

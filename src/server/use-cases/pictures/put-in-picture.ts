@@ -1,13 +1,14 @@
 import type { Context } from '#server/context.ts';
 import { newPublicId } from '#server/db/public-id.ts';
 import { withTransaction } from '#server/db/transaction.ts';
-import { AppError, found, signedIn } from '#server/errors.ts';
+import { found, signedIn } from '#server/errors.ts';
 import { displayName } from '#server/media/display-name.ts';
 import { keepingFilesOnlyWithRows } from '#server/media/only-with-rows.ts';
 import { takePhoto } from '#server/media/photo.ts';
 import { Media, SeriesMedia, User } from '#server/models/index.ts';
 import { freeName } from '#server/use-cases/videos/_video-name.ts';
 import { ownLesson } from '#server/use-cases/workroom/_own-series.ts';
+import { requirePictureRoom } from './_picture-room.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
 
 export interface PutInPictureInput {
@@ -20,8 +21,6 @@ export interface PutInPictureInput {
   readonly originalName: string;
 }
 
-/** All pictures of one teacher together. */
-const MOST_BYTES_OF_TEACHER = 2_000_000_000;
 /** As long as a text may say what a picture shows. */
 const LONGEST_ALT = 200;
 
@@ -41,8 +40,7 @@ export async function putInPicture(ctx: Context, input: PutInPictureInput): Prom
   return keepingFilesOnlyWithRows(ctx.services.media, picture, () => withTransaction(async () => {
     // The person's row is the lock of her room: pictures sent at once are counted one after the other.
     found(await User.findByPk(actor.userId, { lock: true }));
-    const used = (await Media.sum('byteCount', { where: { ownerId: actor.userId, kind: 'picture' } })) as number | null;
-    if ((used ?? 0) + picture.byteCount > MOST_BYTES_OF_TEACHER) throw new AppError('CONFLICT', { says: 'Your pictures together may be 2 GB, and this one would not go in. Write to us, and we see what can be done.' });
+    await requirePictureRoom(actor.userId, picture.byteCount);
     const { byteCount, width, height, files } = picture;
     const media = await Media.create({ publicId, ownerId: actor.userId, kind: 'picture', state: 'ready', originalName, byteCount, width, height, files, detail: { alt: input.alt.trim().slice(0, LONGEST_ALT) } });
     const title = originalName.replace(/\.\w{1,5}$/, '');

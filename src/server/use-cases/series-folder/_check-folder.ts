@@ -1,4 +1,3 @@
-import { parse as parseYaml } from 'yaml';
 import { SeriesFile } from '#contracts/series-folder.ts';
 import { LONGEST_DRAFT } from '#contracts/workroom.ts';
 import type { Piece } from '#core/craft/crafts.ts';
@@ -8,6 +7,7 @@ import { nestsTooDeep } from '#core/series-folder/nests-too-deep.ts';
 import { instantOfWall } from '#core/timetable/opening.ts';
 import { readLessonText } from '#server/lesson-text/parse-pool.ts';
 import type { ParseResult } from '#server/lesson-text/serve-parses.ts';
+import { listFromYaml } from '#core/series-folder/list-as-yaml.ts';
 import { refused } from '#server/series-folder/open-zip.ts';
 
 /** Reads one file of the folder as text; null when there is none. */
@@ -42,6 +42,7 @@ export async function checkFolder(read: ReadFile): Promise<CheckedFolder> {
       texts.push({ source, reading });
     }
     if (opens.rule === 'on-date' && instantOfWall(opens.wall, opens.zone) === null) faults.push({ file: 'series.yaml', says: `Part ${index + 1} opens on a day or in a time zone that is none.` });
+    if (opens.rule === 'after-part' && (opens.part === undefined || opens.part > index)) toMend.push({ file: 'series.yaml', says: `Part ${index + 1} waits for a part that is not an earlier one.` });
     if (opens.rule === 'after-verdict' && !isOpenable(file, index, opens.part)) toMend.push({ file: 'series.yaml', says: `Part ${index + 1} waits for a verdict on a part that is not an earlier one with a checkpoint.` });
   }
   if (faults.length > 0) throw refused(faults);
@@ -59,8 +60,7 @@ async function readSeriesFile(read: ReadFile): Promise<SeriesFile> {
   if (nestsTooDeep(source)) throw refused([{ file, says: 'This list nests deeper than the list of a series ever does.' }]);
   let data: unknown;
   try {
-    // Each key compared with every other would take minutes for a list of nothing but keys.
-    data = parseYaml(source, { maxAliasCount: 0, uniqueKeys: false });
+    data = listFromYaml(source);
   } catch (error) {
     throw refused([{ file, says: error instanceof Error ? error.message : 'This is no YAML.' }]);
   }

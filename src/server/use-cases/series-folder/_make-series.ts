@@ -60,5 +60,5 @@ async function writeLessons(seriesId: number, { file, texts }: CheckedFolder): P
 
 /** A part that is not in the folder is no part of the series; who opens the settings is asked for another. */
 function openingRule(opens: SeriesFile['lessons'][number]['opens'], publicIds: readonly string[]): OpeningRule {
-  return opens.rule === 'after-verdict' ? { rule: 'after-verdict', lesson: publicIds[(opens.part ?? 0) - 1] ?? '' } : opens;
+  return opens.rule === 'after-verdict' || opens.rule === 'after-part' ? { rule: opens.rule, lesson: publicIds[(opens.part ?? 0) - 1] ?? '' } : opens;
 }

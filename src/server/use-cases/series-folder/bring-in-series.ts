@@ -8,6 +8,7 @@ import { enqueue } from '#server/jobs/queue.ts';
 import { Media, SeriesMedia, User, type Lesson, type Series } from '#server/models/index.ts';
 import { refused, withZip } from '#server/series-folder/open-zip.ts';
 import { freeAddress } from '#server/use-cases/series/_free-address.ts';
+import { requirePictureRoom } from '#server/use-cases/pictures/_picture-room.ts';
 import { requireVideoRoom } from '#server/use-cases/videos/_video-room.ts';
 import { checkFolder } from './_check-folder.ts';
 import { makeSeries } from './_make-series.ts';
@@ -27,7 +28,7 @@ const FILM_STAYED_BEHIND = 'The film did not come with its series. Send it here;
 
 /**
  * Makes a draft series in the asker's workroom from the zip at `path`: all of it, or nothing.
- * @throws VALIDATION with a sentence for each file that stands in the way; CONFLICT when her room for videos is used up;
+ * @throws VALIDATION with a sentence for each file that stands in the way; CONFLICT when her room for videos or pictures is used up;
  * UNAVAILABLE when the disk is full.
  */
 export async function bringInSeries(ctx: Context, { path }: { path: string }): Promise<BroughtIn> {
@@ -63,8 +64,9 @@ function requireAllNamed(names: readonly string[], { lessons, videos, pictures }
 }
 
 async function writeMedia(actor: Actor, series: Series, lessons: readonly Lesson[], { videos, pictures }: TakenMedia): Promise<void> {
-  // The person's row is the lock of her room for videos.
+  // The person's row is the lock of her room for videos and for pictures.
   found(await User.findByPk(actor.userId, { lock: true }));
+  if (pictures.length > 0) await requirePictureRoom(actor.userId, pictures.reduce((sum, { photo }) => sum + photo.byteCount, 0));
   const lessonOf = (part: number | undefined): number | null => lessons[(part ?? 0) - 1]?.id ?? null;
   for (const video of videos) {
     const media = await writeVideo(actor, video);

@@ -54,7 +54,7 @@ export async function moveLesson(ctx: Context, input: MoveLessonInput): Promise<
 /** Parts that who starts now could open before one in front of them; `key` names the pair whatever their numbers are. */
 function earlyParts(lessons: readonly Lesson[], now: Date): { readonly key: string; readonly says: string }[] {
   const idOf = (number: number): string => lessons[number - 1]?.publicId ?? '';
-  return outOfOrder(lessons.map(({ publicId, title, opens, isPreview }, index) => ({ publicId, number: index + 1, title, opens, isPreview })), now)
+  return outOfOrder(lessons.map(({ publicId, title, opens, isPreview, checkpoint }, index) => ({ publicId, number: index + 1, title, opens, isPreview, asksForPhoto: checkpoint !== null })), now)
     .map(({ part, earlier, says }) => ({ key: `${idOf(part)} ${idOf(earlier)}`, says }));
 }
 

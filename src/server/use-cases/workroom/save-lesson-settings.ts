@@ -1,7 +1,7 @@
 import { isDeepStrictEqual } from 'node:util';
 import type { LessonSettingsInput } from '#contracts/workroom.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
-import { instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
+import { awaitedPart, instantOfWall, type OpeningRule } from '#core/timetable/opening.ts';
 import type { Context } from '#server/context.ts';
 import { fieldError, found } from '#server/errors.ts';
 import { Lesson, Workroom } from '#server/models/index.ts';
@@ -32,18 +32,19 @@ export async function saveLessonSettings(ctx: Context, input: LessonSettingsInpu
     });
     await requireOpenable(locked, ({ part }) => {
       if (part !== lesson.position) return input.asksForPhoto ? 'wall' : 'asksForPhoto';
-      return input.rule === 'after-verdict' ? 'after' : 'wall';
+      return input.rule === 'after-verdict' ? 'after' : input.rule === 'after-part' ? 'afterPart' : 'wall';
     });
     return placeOf(series, lesson);
   });
 }
 
 /** Something newly typed beside a rule that is not chosen is mostly meant: better to ask than to drop it. */
-function refuseStrayField({ rule, wall = '', days = '', after = '' }: LessonSettingsInput, kept: OpeningRule): void {
+function refuseStrayField({ rule, wall = '', days = '', after = '', afterPart = '' }: LessonSettingsInput, kept: OpeningRule): void {
   const typed = [
     { rule: 'on-date', field: 'wall', value: wall, was: kept.rule === 'on-date' ? kept.wall : '', name: 'On a date' },
     { rule: 'after-seat', field: 'days', value: days.trim(), was: kept.rule === 'after-seat' ? String(kept.days) : '', name: 'Some days after the seat began' },
     { rule: 'after-verdict', field: 'after', value: after, was: kept.rule === 'after-verdict' ? kept.lesson : '', name: 'After you have seen a photo' },
+    { rule: 'after-part', field: 'afterPart', value: afterPart, was: kept.rule === 'after-part' ? kept.lesson : '', name: 'When an earlier part is done' },
   ] as const;
   const stray = typed.find((one) => one.rule !== rule && one.value !== '' && one.value !== one.was);
   if (stray !== undefined) throw fieldError(stray.field, `This is filled in, but another way is chosen. Choose “${stray.name}” above it, or empty it.`);
@@ -63,13 +64,28 @@ async function openingOf(ctx: Context, input: LessonSettingsInput, lesson: Lesso
       return { rule: 'after-seat', days: daysOf(input.days) };
     case 'on-date':
       return onDate(ctx, input.wall ?? '', zone, lesson);
+    case 'after-part':
+      return afterPart(input.afterPart ?? '', lesson);
     case 'after-verdict': {
-      const earlier = await Lesson.findOne({ where: { publicId: input.after ?? '', seriesId: lesson.seriesId, takenOutAt: null } });
+      const earlier = await otherPart(input.after ?? '', lesson);
       if (earlier?.checkpoint == null) throw fieldError('after', 'Choose an earlier part that asks for a photo.');
       if (earlier.position >= lesson.position) throw fieldError('after', 'That part comes later, so this one could never open. Choose an earlier one.');
       return { rule: 'after-verdict', lesson: earlier.publicId };
     }
   }
+}
+
+function otherPart(publicId: string, { seriesId }: Lesson): Promise<Lesson | null> {
+  return Lesson.findOne({ where: { publicId, seriesId, takenOutAt: null } });
+}
+
+async function afterPart(publicId: string, lesson: Lesson): Promise<OpeningRule> {
+  const before = await otherPart(publicId, lesson);
+  if (before === null) throw fieldError('afterPart', 'Choose an earlier part.');
+  if (before.id === lesson.id) throw fieldError('afterPart', 'A part cannot wait for itself: nobody could ever open it. Choose an earlier one.');
+  if (awaitedPart(before.opens) === lesson.publicId) throw fieldError('afterPart', `“${before.title}” waits for this part already, so neither could ever open. Choose another one.`);
+  if (before.position > lesson.position) throw fieldError('afterPart', 'That part comes later, so this one could never open. Choose an earlier one.');
+  return { rule: 'after-part', lesson: before.publicId };
 }
 
 function daysOf(typed: string | undefined): number {

@@ -3,13 +3,15 @@ import { openingFaults, type PartOpening } from '#core/series/opening-faults.ts'
 import { ruleWords } from '#core/timetable/rule-words.ts';
 import { changedLines } from '#core/lesson-text/changed-lines.ts';
 
-const part = (number: number, given: Partial<PartOpening> = {}): PartOpening => ({ number, opensAfterPart: null, hasCheckpoint: false, opensAt: null, ...given });
+const part = (number: number, given: Partial<PartOpening> = {}): PartOpening => ({ number, opensAfterPart: null, waitsFor: 'verdict', hasCheckpoint: false, opensAt: null, ...given });
 
 describe('parts that could never open', () => {
   test.each([
     ['a later one', [part(1, { opensAfterPart: 2 }), part(2, { hasCheckpoint: true })], 'It waits for Part 2, which comes later, so nobody could ever open it.'],
     ['itself', [part(1, { opensAfterPart: 1, hasCheckpoint: true })], 'It waits for its own photo, so nobody could ever open it.'],
     ['one that was taken out', [part(1, { opensAfterPart: 'taken-out' })], 'It waits for a part that was taken out. Choose another part, or let it open in another way.'],
+    ['itself to be done', [part(1, { opensAfterPart: 1, waitsFor: 'done' })], 'It waits for itself, so nobody could ever open it.'],
+    ['a later one to be done', [part(1, { opensAfterPart: 2, waitsFor: 'done' }), part(2)], 'It waits for Part 2, which comes later, so nobody could ever open it.'],
     ['one without a photo', [part(1), part(2, { opensAfterPart: 1 })], 'It waits for a verdict on Part 1, which asks for no photo.'],
   ])('wait for %s', (_words, parts, says) => {
     expect(openingFaults(parts).map((fault) => fault.says)).toEqual([says]);
@@ -21,7 +23,7 @@ describe('parts that could never open', () => {
   });
 
   test('there are none in a series in order', () => {
-    expect(openingFaults([part(1, { hasCheckpoint: true }), part(2, { opensAfterPart: 1 }), part(3, { opensAt: new Date('2027-01-01') })])).toEqual([]);
+    expect(openingFaults([part(1, { hasCheckpoint: true }), part(2, { opensAfterPart: 1 }), part(3, { opensAfterPart: 2, waitsFor: 'done' }), part(4, { opensAt: new Date('2027-01-01') })])).toEqual([]);
   });
 });
 
@@ -34,6 +36,8 @@ describe('a rule in words', () => {
     [{ rule: 'after-seat', days: 7 }, '7 days after the seat began'],
     [{ rule: 'on-date', wall: '2027-07-01T09:00', zone: 'Europe/Berlin' }, 'on 1 July 2027 at 09:00'],
     [{ rule: 'after-verdict', lesson: 'b' }, 'after you say weave on to the photo of Part 2'],
+    [{ rule: 'after-part', lesson: 'b' }, 'when Part 2 is done'],
+    [{ rule: 'after-part', lesson: 'gone' }, 'after a part that was taken out'],
     [{ rule: 'after-verdict', lesson: 'gone' }, 'after a photo of a part that was taken out'],
   ] as const)('%j', (rule, words) => {
     expect(ruleWords(rule, numberOf)).toBe(words);

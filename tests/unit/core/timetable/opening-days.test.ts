@@ -5,9 +5,9 @@ import { monthSheets } from '#core/timetable/month-sheet.ts';
 import { earliestOf, openingDays, type PartToOpen, type SeatInTime } from '#core/timetable/opening-days.ts';
 import { instantOfWall, standingOf, type OpeningRule } from '#core/timetable/opening.ts';
 
-const part = (number: number, opens: OpeningRule, isPreview = false): PartToOpen => ({ publicId: `p${number}`, number, title: `Part ${number}`, opens, isPreview });
+const part = (number: number, opens: OpeningRule, isPreview = false): PartToOpen => ({ publicId: `p${number}`, number, title: `Part ${number}`, opens, isPreview, asksForPhoto: false });
 const start = new Date('2026-12-01T09:00:00Z');
-const seat = (given: Partial<SeatInTime> = {}): SeatInTime => ({ seatStartedAt: start, wovenOnAt: new Map(), answerDays: 2, now: start, ...given });
+const seat = (given: Partial<SeatInTime> = {}): SeatInTime => ({ seatStartedAt: start, wovenOnAt: new Map(), doneAt: new Map(), answerDays: 2, now: start, ...given });
 
 describe('what somebody meets who starts today', () => {
   test('parts open from the start, after days, on a date, and when a photo was answered', () => {
@@ -47,6 +47,15 @@ describe('what somebody meets who starts today', () => {
     expect(openingDays([part(1, { rule: 'after-verdict', lesson }), part(2, { rule: 'at-once' })], seat())[0]).toMatchObject({ when: 'verdict', after: null, earliest: null });
   });
 
+  test('a part that waits for one to be done opens the same day at the earliest, and a photo’s answer is waited for too', () => {
+    const waits = { rule: 'after-part', lesson: 'p1' } as const;
+    expect(openingDays([part(1, { rule: 'after-seat', days: 3 }), part(2, waits)], seat())[1]).toMatchObject({ when: 'part', after: 1, earliest: new Date('2026-12-04T09:00:00Z') });
+    expect(openingDays([{ ...part(1, { rule: 'after-seat', days: 3 }), asksForPhoto: true }, part(2, waits)], seat())[1]).toMatchObject({ earliest: new Date('2026-12-06T09:00:00Z') });
+    const at = new Date('2026-12-02T10:00:00Z');
+    expect(openingDays([part(1, { rule: 'at-once' }), part(2, waits)], seat({ doneAt: new Map([['p1', at]]) }))[1]).toMatchObject({ when: 'at', at });
+    expect(openingDays([part(1, { rule: 'after-part', lesson: 'p2' }), part(2, { rule: 'at-once' })], seat())[0]).toMatchObject({ when: 'part', after: null, earliest: null });
+  });
+
   test('two verdicts in a row take the promised time twice', () => {
     const days = openingDays([part(1, { rule: 'at-once' }), part(2, { rule: 'after-verdict', lesson: 'p1' }), part(3, { rule: 'after-verdict', lesson: 'p2' })], seat());
     expect(days.map((day) => earliestOf(day, seat())?.toISOString())).toEqual(['2026-12-01T09:00:00.000Z', '2026-12-03T09:00:00.000Z', '2026-12-05T09:00:00.000Z']);
@@ -82,7 +91,7 @@ describe.each(CHANGES)('round the change of clocks in %s on %s (%s)', (zone, day
         const seatStartedAt = new Date(`${around[0] ?? ''}T00:00:00Z`);
         const [entry] = openingDays([part(1, opens)], seat({ seatStartedAt }));
         if (entry?.when !== 'at') continue;
-        const standing = (now: Date): boolean => standingOf(opens, { seatStartedAt, wovenOn: new Set(), now }).open;
+        const standing = (now: Date): boolean => standingOf(opens, { seatStartedAt, wovenOn: new Set(), done: new Set(), now }).open;
         expect([standing(new Date(entry.at.getTime() - 1)), standing(entry.at)]).toEqual([false, true]);
       }
     }));

@@ -4,6 +4,7 @@ import { instantOfWall, standingOf, type SeatFacts } from '#core/timetable/openi
 const facts = (given: Partial<SeatFacts> = {}): SeatFacts => ({
   seatStartedAt: new Date('2026-03-01T10:00:00Z'),
   wovenOn: new Set(),
+  done: new Set(),
   now: new Date('2026-03-03T09:00:00Z'),
   ...given,
 });
@@ -29,6 +30,14 @@ describe('when a part opens', () => {
     const rule = { rule: 'after-verdict', lesson: 'b' } as const;
     expect(standingOf(rule, facts({ wovenOn: new Set(['a']) }))).toEqual({ open: false, until: 'verdict', lesson: 'b' });
     expect(standingOf(rule, facts({ wovenOn: new Set(['a', 'b']) }))).toEqual({ open: true });
+  });
+});
+
+describe('when another part must be done first', () => {
+  const rule = { rule: 'after-part', lesson: 'b' } as const;
+  test('shut until that one is done, whatever others are', () => {
+    expect(standingOf(rule, facts({ done: new Set(['a']) }))).toEqual({ open: false, until: 'part', lesson: 'b' });
+    expect(standingOf(rule, facts({ done: new Set(['b']) }))).toEqual({ open: true });
   });
 });
 

@@ -3,7 +3,7 @@ import { outOfOrder } from '#core/timetable/out-of-order.ts';
 import type { OpeningRule } from '#core/timetable/opening.ts';
 
 const start = new Date('2026-12-01T08:00:00Z');
-const told = (...rules: OpeningRule[]): string[] => outOfOrder(rules.map((opens, index) => ({ publicId: `p${index + 1}`, number: index + 1, title: '', opens, isPreview: false })), start).map(({ says }) => says);
+const told = (...rules: OpeningRule[]): string[] => outOfOrder(rules.map((opens, index) => ({ publicId: `p${index + 1}`, number: index + 1, title: '', opens, isPreview: false, asksForPhoto: false })), start).map(({ says }) => says);
 const after = (days: number): OpeningRule => ({ rule: 'after-seat', days });
 
 test('parts that open one after another, or together, are in order', () => {
