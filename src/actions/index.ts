@@ -8,7 +8,8 @@ import { office } from './office.ts';
 import { people } from './people.ts';
 import { pieces } from './pieces.ts';
 import { questions } from './questions.ts';
+import { reviews } from './reviews.ts';
 import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, helpers, notices, office, people, pieces, questions, videos, workroom };
+export const server = { bench, checkout, following, helpers, notices, office, people, pieces, questions, reviews, videos, workroom };

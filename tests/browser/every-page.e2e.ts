@@ -28,6 +28,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/office/log': [['pell', '/office/log']],
   '/office/mail': [['pell', '/office/mail']],
   '/office/reports': [['pell', '/office/reports']],
+  '/office/reviews': [['pell', '/office/reviews']],
   '/office/people': [['pell', '/office/people']],
   '/office/people/[person]': [['pell', ({ person }) => `/office/people/${person}`]],
   '/prove': [['ilse', '/prove']],

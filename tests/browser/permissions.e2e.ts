@@ -67,6 +67,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/office/log': [{ at: '/office/log', answers: STEWARD }],
   '/office/mail': [{ at: '/office/mail', answers: STEWARD }],
   '/office/reports': [{ at: '/office/reports', answers: STEWARD }],
+  '/office/reviews': [{ at: '/office/reviews', answers: STEWARD }],
   '/office/people': [{ at: '/office/people', answers: STEWARD }],
   '/office/people/[person]': [{ at: ({ person }) => `/office/people/${person}`, answers: STEWARD }],
   '/prove': [{ at: '/prove', answers: SIGNED_IN }],

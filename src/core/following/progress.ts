@@ -24,6 +24,14 @@ export function isDone(part: Pick<PartInHand, 'isFinished' | 'verdict'>): boolea
   return part.isFinished || part.verdict === 'weave-on';
 }
 
+/**
+ * Whether somebody has made the whole piece.
+ * @param toComeCount parts that are still being written
+ */
+export function hasFinished(parts: readonly Pick<PartInHand, 'isFinished' | 'verdict'>[], toComeCount: number): boolean {
+  return parts.length > 0 && toComeCount === 0 && parts.every(isDone);
+}
+
 export function stepsDone({ steps, ticked }: Pick<PartInHand, 'steps' | 'ticked'>): number {
   return steps.filter((id) => ticked.has(id)).length;
 }

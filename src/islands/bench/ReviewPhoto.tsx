@@ -69,7 +69,7 @@ export function ReviewPhoto({ action, photo, earlier, studentName, phrases, type
     'r': () => look(turned),
     '+': () => look((was) => closer(was, aspect, STEP)),
     '-': () => look((was) => closer(was, aspect, 1 / STEP)),
-    '0': () => look(WHOLE),
+    '0': () => look((was) => ({ ...WHOLE, turns: was.turns })),
     '?': () => showKeys(true),
     phrase: (number) => { const phrase = phrases[number - 1]; if (phrase !== undefined) change({ kind: 'insert', phrase }); },
     pan: view.zoom > 1 ? (dx, dy) => look((was) => moved(was, aspect, dx * PAN, dy * PAN)) : null,

@@ -17,8 +17,12 @@ export function ViewBar({ view, look, aspect, onPin, onKeys, beside }: Props) {
   return (
     <div className="view-bar" role="group" aria-label="The photo">
       <Button small kind="quiet" glyph="plus" aria-keyshortcuts="+" onClick={() => look((before) => closer(before, aspect, STEP))}>Closer</Button>
-      <Button small kind="quiet" glyph="minus" aria-keyshortcuts="-" off={view.zoom > 1 ? undefined : 'The whole photo is in sight.'} onClick={() => look((before) => closer(before, aspect, 1 / STEP))}>Further</Button>
-      {view.zoom > 1 && <Button small kind="quiet" aria-keyshortcuts="0" onClick={() => look((before) => ({ ...WHOLE, turns: before.turns }))}>Whole</Button>}
+      {view.zoom > 1 && (
+        <>
+          <Button small kind="quiet" glyph="minus" aria-keyshortcuts="-" onClick={() => look((before) => closer(before, aspect, 1 / STEP))}>Further</Button>
+          <Button small kind="quiet" aria-keyshortcuts="0" onClick={() => look((before) => ({ ...WHOLE, turns: before.turns }))}>Whole</Button>
+        </>
+      )}
       <Button small kind="quiet" glyph="turn" aria-keyshortcuts="R" onClick={() => look(turned)}>Turn</Button>
       <Button small kind="quiet" glyph="here" aria-keyshortcuts="P" onClick={onPin}>Pin</Button>
       {beside !== null && <Button small kind="quiet" glyph="photo" aria-keyshortcuts="C" onClick={beside.next}>{beside.says}</Button>}

@@ -29,6 +29,7 @@ export { ProgressPhoto } from './progress-photo.ts';
 export { Question } from './question.ts';
 export { QuestionAnswer } from './question-answer.ts';
 export { RefusedAddress } from './refused-address.ts';
+export { Review } from './review.ts';
 export { Series } from './series.ts';
 export { SeriesMedia } from './series-media.ts';
 export { Session } from './session.ts';

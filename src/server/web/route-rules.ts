@@ -63,6 +63,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/office': 'steward',
   '/office/people': 'steward',
   '/office/people/[person]': 'steward',
+  '/office/reviews': 'steward',
   '/office/mail': 'steward',
   '/office/jobs': 'steward',
   '/office/log': 'steward',

@@ -14,6 +14,7 @@ import { createEarlierDrafts } from './0011-create-earlier-drafts.ts';
 import { createCalendars } from './0012-create-calendars.ts';
 import { createPieceDrafts } from './0013-create-piece-drafts.ts';
 import { createBench } from './0014-create-bench.ts';
+import { createReviews } from './0015-create-reviews.ts';
 import { createNotices } from './0016-create-notices.ts';
 import { createQuestions } from './0018-create-questions.ts';
 import { createHelperInvitations } from './0019-create-helper-invitations.ts';
@@ -35,6 +36,7 @@ export const migrations: readonly Migration[] = [
   createCalendars,
   createPieceDrafts,
   createBench,
+  createReviews,
   createNotices,
   createQuestions,
   createHelperInvitations,

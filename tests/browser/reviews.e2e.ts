@@ -1,0 +1,86 @@
+/** From the last part to words about the series: a finisher writes, the teacher answers, the steward hides and shows. */
+import { expect, type Browser, type Page } from 'playwright/test';
+import sharp from 'sharp';
+import { stateOf, type DemoName } from './support/demo-people.ts';
+import { newStudent } from './support/take-seat.ts';
+import { expectFaultless, test } from './support/test.ts';
+
+const CORDS = { slug: 'three-knotted-cords', title: 'Three Knotted Cords', parts: 3 };
+const SERIES = `/series/${CORDS.slug}`;
+
+const as = async (browser: Browser, name: DemoName): Promise<Page> => (await browser.newContext({ storageState: stateOf(name) })).newPage();
+
+test('who finished a series says how it was, the teacher answers, the steward may hide it', async ({ page, browser, request }) => {
+  test.setTimeout(180_000);
+  const name = `Nell ${Date.now().toString(36)}`;
+  await newStudent(page, request, CORDS, name);
+  const [teodor, pell] = [await as(browser, 'teodor'), await as(browser, 'pell')];
+  const words = `The second cord took me an evening, says ${name}.`;
+
+  await test.step('before the last part nothing is asked', async () => {
+    await page.goto(SERIES);
+    await expect(page.getByText('Say how it was')).toHaveCount(0);
+  });
+
+  await test.step('every part is done', async () => {
+    await page.goto(`${SERIES}/1`);
+    await page.getByRole('button', { name: 'Part 1 is done' }).click();
+    await page.goto(`${SERIES}/2`);
+    const lesson = await page.locator('input[name="lesson"]').first().inputValue();
+    const buffer = await sharp({ create: { width: 900, height: 600, channels: 3, background: '#b9aa8d' } }).jpeg().toBuffer();
+    const sent = await page.request.post('/api/photos', { headers: { 'sec-fetch-site': 'same-origin' }, multipart: { series: CORDS.slug, lesson, words: '', photo: { name: 'cords.jpg', mimeType: 'image/jpeg', buffer } } });
+    const { photo } = (await sent.json()) as { photo: string };
+    await teodor.goto(`/workroom/bench?photo=${photo}`);
+    await teodor.getByRole('button', { name: /^Weave on/ }).click();
+    await expect(teodor.getByText(`Weave on: goes out to ${name} in ten seconds.`)).toBeVisible();
+    await page.goto(`${SERIES}/3`);
+    await page.getByRole('button', { name: 'Part 3 is done' }).click();
+    await expect(async () => {
+      await page.goto('/loom');
+      await expect(page.getByRole('link', { name: 'Say how it was' })).toBeVisible({ timeout: 500 });
+    }).toPass({ timeout: 40_000 });
+  });
+
+  await test.step('she writes, is told what is missing, and everybody reads it', async () => {
+    await page.getByRole('link', { name: 'Say how it was' }).click();
+    await page.getByLabel('Your name there').fill('N.');
+    await page.getByRole('button', { name: 'Keep my words' }).click();
+    await expect(page.getByText('Choose yes or no.').first()).toBeVisible();
+    await page.getByLabel('How was it to make?').fill(words);
+    await page.getByLabel('Yes', { exact: true }).check();
+    await page.getByRole('button', { name: 'Keep my words' }).click();
+    await expect(page.locator('#reviews').getByText(words).first()).toBeVisible();
+    await expectFaultless(page);
+    const visitor = await (await browser.newContext()).newPage();
+    await visitor.goto(SERIES);
+    await expect(visitor.locator('#reviews').getByText(words)).toBeVisible();
+    await expect(visitor.locator('#reviews').getByText(/^N\., /).first()).toBeVisible();
+    await visitor.context().close();
+  });
+
+  const review = (at: Page) => at.getByRole('listitem').filter({ hasText: words });
+  await test.step('the teacher answers, and has no way to take it away', async () => {
+    await teodor.goto(SERIES);
+    await review(teodor).getByText(/^Answer/).click();
+    await review(teodor).getByLabel('Your answer to N.').fill('Evenings well spent. Thank you.');
+    await review(teodor).getByRole('button', { name: 'Keep the answer' }).click();
+    await expect(review(teodor).getByText('Evenings well spent. Thank you.').first()).toBeVisible();
+    await expect(review(teodor).getByRole('button', { name: /Hide|Take out/ })).toHaveCount(0);
+  });
+
+  await test.step('the steward hides it with a reason, and shows it again', async () => {
+    await pell.goto('/office/reviews');
+    await review(pell).getByText(/^Hide/).click();
+    await review(pell).getByLabel('Reason').fill('It names somebody.');
+    await review(pell).getByRole('button', { name: 'Hide it' }).click();
+    await expect(review(pell).getByText(/^Hidden/)).toBeVisible();
+    await expectFaultless(pell);
+    await page.goto(SERIES);
+    await expect(page.getByText('Your review is hidden by the steward: It names somebody.')).toBeVisible();
+    await pell.goto('/office/reviews?state=hidden');
+    await review(pell).getByRole('button', { name: /^Show again/ }).click();
+    await page.goto(SERIES);
+    await expect(review(page).getByText('Evenings well spent. Thank you.')).toBeVisible();
+  });
+  await Promise.all([teodor, pell].map((one) => one.context().close()));
+});
