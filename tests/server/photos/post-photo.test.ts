@@ -9,7 +9,7 @@ import { photoThread } from '#server/queries/photos/photo-thread.ts';
 import { postPhoto } from '#server/use-cases/photos/post-photo.ts';
 import { contextFor, contextOf, type TestContext } from '../../support/context.ts';
 import { buildUser } from '../../support/factories.ts';
-import { buildFollowed } from '../../support/followed.ts';
+import { buildFollowed, type Followed } from '../../support/followed.ts';
 import type { User } from '#server/models/index.ts';
 
 let folder = '';
@@ -61,5 +61,20 @@ describe('a progress photo', () => {
     await expect(post()).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('6 photos of yours wait already') });
     expect(await ProgressPhoto.count()).toBe(6);
     expect(await files()).toHaveLength(12);
+  });
+
+  test.each([
+    ['the part was taken out', async ({ parts: [, second] }: Followed) => { await second.update({ takenOutAt: new Date() }); }, 'Your teacher took this part out'],
+    ['the part asks for no photo any more', async ({ parts: [, second] }: Followed) => { await second.update({ checkpoint: null }); }, 'Your teacher took this part out'],
+    ['the seat was closed', async ({ seat }: Followed) => { await seat.update({ state: 'closed' }); }, 'Your seat ended'],
+    ['the whole series is gone', async ({ seat }: Followed) => { await seat.destroy(); }, 'Your seat ended'],
+  ])('is told when %s while it was on its way, and leaves neither a row nor a file', async (_what, goes, says) => {
+    const followed = await buildFollowed();
+    const { series, parts: [, second], student } = followed;
+    const store = new DiskMediaStore(join(folder, 'uploads'));
+    const requireRoom = store.requireRoom.bind(store);
+    store.requireRoom = async () => { await goes(followed); await requireRoom(); };
+    await expect(postPhoto(await contextFor(student, { media: store }), { series: series.slug, lesson: second.publicId, ...(await upload()) })).rejects.toMatchObject({ code: 'GONE', says: expect.stringContaining(says) });
+    expect([await ProgressPhoto.count(), await Media.count(), await files()]).toEqual([0, 0, []]);
   });
 });

@@ -5,7 +5,7 @@ import type { Context } from '#server/context.ts';
 import { displayName } from '#server/media/display-name.ts';
 import { keepingFilesOnlyWithRows } from '#server/media/only-with-rows.ts';
 import { takePhoto } from '#server/media/photo.ts';
-import { Enrolment, Media, ProgressPhoto } from '#server/models/index.ts';
+import { Enrolment, Lesson, Media, ProgressPhoto } from '#server/models/index.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
 
@@ -26,7 +26,7 @@ const MOST_WAITING = 6;
 /**
  * Puts a photo into the thread of a checkpoint, where it waits for the teacher. The picture is read and written anew
  * before any row is made, outside the transaction.
- * @throws NOT_FOUND when the part is not hers to follow; VALIDATION when it asks for no photo; UNSUPPORTED, TOO_LARGE.
+ * @throws NOT_FOUND when the part is not hers to follow; VALIDATION when it asks for no photo; GONE when seat or part ended while the photo was on its way; UNSUPPORTED, TOO_LARGE.
  */
 export async function postPhoto(ctx: Context, input: PostPhotoInput): Promise<ProgressPhoto> {
   authorize(ctx.actor !== null, 'UNAUTHENTICATED');
@@ -41,7 +41,7 @@ export async function postPhoto(ctx: Context, input: PostPhotoInput): Promise<Pr
   const publicId = newPublicId();
   const photo = await takePhoto(ctx.services.media, input.path, `photos/${publicId}`);
   return keepingFilesOnlyWithRows(ctx.services.media, photo, () => withTransaction(async () => {
-    found(await Enrolment.findByPk(seat.enrolmentId, { lock: true }));
+    await requireStillThere(seat.enrolmentId, part.id);
     const waiting = await ProgressPhoto.count({ where: { enrolmentId: seat.enrolmentId, lessonId: part.id, verdict: 'waits' } });
     if (waiting >= MOST_WAITING) throw new AppError('CONFLICT', { says: `${waiting} photos of yours wait already. Your teacher looks at them first.` });
     const media = await Media.create({
@@ -58,4 +58,12 @@ export async function postPhoto(ctx: Context, input: PostPhotoInput): Promise<Pr
     });
     return ProgressPhoto.create({ enrolmentId: seat.enrolmentId, lessonId: part.id, mediaId: media.id, words: input.words.slice(0, 1_000) });
   }));
+}
+
+/** Holds the seat. A photo takes a while to come: what it belongs to may have gone meanwhile. */
+async function requireStillThere(enrolmentId: number, lessonId: number): Promise<void> {
+  const seat = await Enrolment.findByPk(enrolmentId, { lock: true });
+  const lesson = await Lesson.findByPk(lessonId);
+  if (seat?.state !== 'active') throw new AppError('GONE', { says: 'Your seat ended while the photo was on its way. It was not kept.' });
+  if (lesson === null || lesson.takenOutAt !== null || lesson.checkpoint === null) throw new AppError('GONE', { says: 'Your teacher took this part out while the photo was on its way. It was not kept; open the series to see its parts now.' });
 }
