@@ -156,7 +156,7 @@ test.describe('on a phone', () => {
     expect(await placeOf()).toEqual([25, 25]);
 
     const touch = await page.context().newCDPSession(page);
-    await swipe(touch, [box.x + box.width / 4, box.y + box.height / 4], [box.x + box.width / 2, box.y + box.height / 2]);
+    await swipe(page, touch, [box.x + box.width / 4, box.y + box.height / 4], [box.x + box.width / 2, box.y + box.height / 2]);
     await expect.poll(placeOf).toEqual([50, 50]);
     const size = await pin.locator('.pin-reach').boundingBox();
     expect(size?.width).toBeGreaterThanOrEqual(44);
@@ -170,10 +170,11 @@ test.describe('on a phone', () => {
   });
 });
 
-/** One finger from here to there. */
-async function swipe(touch: CDPSession, from: readonly [number, number], to: readonly [number, number]): Promise<void> {
+/** One finger from here to there. It rests before it is lifted, else the browser takes the next press for the end of a fling. */
+async function swipe(page: Page, touch: CDPSession, from: readonly [number, number], to: readonly [number, number]): Promise<void> {
   const at = (share: number) => [{ x: from[0] + (to[0] - from[0]) * share, y: from[1] + (to[1] - from[1]) * share }];
   await touch.send('Input.dispatchTouchEvent', { type: 'touchStart', touchPoints: at(0) });
   for (const share of [0.25, 0.5, 0.75, 1]) await touch.send('Input.dispatchTouchEvent', { type: 'touchMove', touchPoints: at(share) });
+  await page.waitForTimeout(300);
   await touch.send('Input.dispatchTouchEvent', { type: 'touchEnd', touchPoints: [] });
 }
