@@ -168,6 +168,8 @@ test('a newcomer builds a series in seven parts, and a student finds, buys and s
     await main(page).getByRole('button', { name: 'Save', exact: true }).click();
     await expect(page.getByLabel('Price of a seat')).toHaveValue('36.00');
     await page.goto(`${desk}/before`);
+    await expect(main(page).getByText('Nothing stands in the way.')).toBeVisible();
+    await expect(main(page).getByText('Parts 4 to 6 can be opened while Part 3 still waits for Part 2. If they build on it, let them wait too.')).toBeVisible();
     await expectFaultless(page);
     await page.goto(`${desk}/timetable`);
   });

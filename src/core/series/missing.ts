@@ -5,6 +5,7 @@
 import { contradictions, type ListedLine } from '#core/gathering/contradictions.ts';
 import { listed } from '#core/listed.ts';
 import { openingFaults, type PartOpening } from '#core/series/opening-faults.ts';
+import { passingBy } from '#core/series/passing-by.ts';
 
 export interface SeriesInHand {
   readonly title: string;
@@ -117,6 +118,7 @@ function worthALook({ story, techniques, parts }: SeriesInHand): Missing[] {
     ...(parts.every(({ isPreview }) => !isPreview) ? [noticed(null, 'parts', 'No part is free to read. One that is lets people see how you teach.')] : []),
     ...(parts.every(({ hasCheckpoint }) => !hasCheckpoint) ? [noticed(null, 'parts', 'No part asks for a photo, so you see no loom before it is too late to mend.')] : []),
     ...contradictions(parts.flatMap(({ number, list }) => list.map((line) => ({ ...line, part: number }))), parts.length).map(({ part, line, says }) => ({ ...noticed(part, 'list', says), item: line })),
+    ...passingBy(parts).map(({ part, says }) => noticed(part, 'settings', says)),
     ...parts.flatMap(lookAtPart),
     ...parts.flatMap(({ number, isEmpty, textProblems, textWarnings, stepCount }) => [
       ...textWarnings.map(({ line, reason }) => ({ ...noticed(number, 'text', `Line ${line}: ${reason}`), line })),
