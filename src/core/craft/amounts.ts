@@ -1,7 +1,8 @@
 /** Amounts a text or a gathering list can ask of a plan by name, each with the way it was got. */
 import type { Amount } from '#core/craft/amounts/amount-types.ts';
+import { askAmount } from '#core/craft/amounts/ask-amount.ts';
 import { craftOf, CRAFT_NAMES, CRAFTS, type Piece, type Plan } from '#core/craft/crafts.ts';
-import { fail, succeed, type Outcome } from '#core/outcome.ts';
+import type { Outcome } from '#core/outcome.ts';
 
 export type * from '#core/craft/amounts/amount-types.ts';
 
@@ -10,15 +11,9 @@ const keysOf = (groups: readonly { readonly keys: readonly string[] }[]): string
 /** Every key any craft has, with `<role>`, `<name>` and the like standing for names a piece gives. */
 export const AMOUNT_KEYS: readonly string[] = [...new Set(CRAFT_NAMES.flatMap((name) => keysOf(CRAFTS[name].amounts)))];
 
-/**
- * The amount a key names for this piece and its plan. Lengths and masses of yarn are
- * those to have in hand, with margin. A key this piece does not tell is `E_ENUM`, with
- * the reason.
- */
+/** As `askAmount`, by the craft of the piece. */
 export function amountOf(key: string, piece: Piece, plan: Plan): Outcome<Amount> {
-  const reckoned = craftOf(piece).amount(key, { piece, plan });
-  if (typeof reckoned === 'string') return fail([{ code: 'E_ENUM', path: '', message: reckoned }]);
-  return succeed({ key, label: reckoned.label, ...reckoned.quantity, howReckoned: reckoned.how });
+  return askAmount(craftOf(piece), key, { piece, plan });
 }
 
 const PLACE = /<([a-z]+)>/;

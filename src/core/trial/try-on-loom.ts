@@ -1,5 +1,6 @@
 /** Whether a pattern fits the loom somebody typed, what it would be there, and if not, why not and what would. */
-import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import type { FittedPiece, MyPiece } from '#core/craft/fit.ts';
+import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import { widestOn } from '#core/craft/fitting/ways-to-fit.ts';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
@@ -27,7 +28,7 @@ export function tryOnLoom(pattern: FrameLoomPiece, title: string, typed: TypedLo
   if (!read.ok) return { ok: false, fields: read.fields };
   const { units, ends } = typed;
   const onLoom: MyPiece = { loom: read.loom, endsTogether: ends };
-  const asPattern = fitPiece(pattern, onLoom, units);
+  const asPattern = fitWoven(pattern, onLoom, units);
   if (asPattern.ok) return fitting(onLoom, asPattern.value, asPattern.warnings, read.loom.insideWidthMm, false);
   if (!isTooWide(asPattern.problems)) return { ok: true, fits: false, says: sentences(asPattern.problems), codes: codesOf(asPattern.problems), widest: null };
   const widest = widestThatFits(pattern, onLoom, units);
@@ -54,7 +55,7 @@ function widestThatFits(pattern: FrameLoomPiece, onLoom: MyPiece, units: Units):
   const widthMm = widestOn(pattern, onLoom, units);
   if (widthMm === undefined) return null;
   const mine: MyPiece = { ...onLoom, widthMm };
-  const fit = fitPiece(pattern, mine, units);
+  const fit = fitWoven(pattern, mine, units);
   return fit.ok ? { mine, fitted: fit.value, warnings: fit.warnings } : null;
 }
 
@@ -62,7 +63,7 @@ function tooWide(pattern: FrameLoomPiece, title: string, onLoom: MyPiece, units:
   const size = (mm: number): string => amountText(lengthOf(mm, 'size'), units);
   const inside = onLoom.loom?.insideWidthMm ?? 0;
   const pitch = onLoom.loom?.nailPitchMm ?? 0;
-  const onAny = fitPiece(pattern, { ...onLoom, loom: { ...onLoom.loom, insideWidthMm: BOUNDLESS_MM } }, units);
+  const onAny = fitWoven(pattern, { ...onLoom, loom: { ...onLoom.loom, insideWidthMm: BOUNDLESS_MM } }, units);
   const needs = onAny.ok ? ` ${title} needs ${amountText(lengthOf(onAny.value.plan.loom.insideWidthNeededMm, 'least'), units)}.` : '';
   const so = widestMm === null ? ' It is too narrow for this piece.' : ` With nails at ${amountText(lengthOf(pitch, 'fine'), units)} it would be ${size(widestMm)} wide.`;
   return `Your loom is ${size(inside)} inside.${needs}${so}`;

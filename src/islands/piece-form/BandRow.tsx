@@ -1,6 +1,6 @@
 import { memo, useMemo, useState } from 'react';
 import { isTechnique } from '#core/craft/piece-form/asked-of-band.ts';
-import { TECHNIQUES } from '#core/craft/techniques/registry.ts';
+import { TECHNIQUE_WORDS } from '#core/craft/techniques/technique-words.ts';
 import { textOf, type TypedBand } from '#core/craft/piece-form/typed-piece.ts';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
@@ -63,5 +63,5 @@ export const BandRow = memo(function BandRow({ band, index, count, laterIsUp, wo
 function techniqueWords({ texts, shapes }: TypedBand): string {
   const technique = textOf(texts, 'technique');
   if (!isTechnique(technique)) return 'Band';
-  return technique === 'tabby' && shapes.length > 0 ? 'Tabby with shapes' : TECHNIQUES[technique].words.label;
+  return technique === 'tabby' && shapes.length > 0 ? 'Tabby with shapes' : TECHNIQUE_WORDS[technique].label;
 }

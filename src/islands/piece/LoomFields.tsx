@@ -2,7 +2,8 @@ import type { Dispatch } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
 import { chosenLoom } from '#core/craft/my-piece/judge-mine.ts';
-import { loomKind } from '#core/craft/looms/looms.ts';
+import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
+import { DEFAULT_KIND, loomKind } from '#core/craft/looms/looms.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { fieldUnit } from '#core/craft/piece-form/field-text.ts';
@@ -45,8 +46,8 @@ export function LoomFields({ typed, pattern, faults, change, alive }: LoomFields
     );
   };
   const choice = (asked: typeof WARPING) => asked.kind === 'choice' ? asked.options.map(({ text, label }) => ({ value: text, label })) : [];
-  const { kind: name } = chosenLoom(typed);
-  const kind = loomKind(name === undefined ? pattern.loom : { kind: name });
+  const name = chosenLoom(typed).kind ?? pattern.loom.kind ?? DEFAULT_KIND;
+  const kind = loomKind({ kind: name });
   const ways = choice(WARPING).filter(({ value }) => kind.warpings.some((way) => way === value));
   const chooser = (asked: typeof WARPING, options: readonly { readonly value: string; readonly label: string }[], hint?: string) => (
     <Choose name={asked.key} legend={asked.label} hint={hint} value={textOf(typed.texts, asked.key)} options={options} error={faults[asked.key]} onChoose={(text) => change({ kind: 'type', key: asked.key, text })} />
@@ -56,7 +57,7 @@ export function LoomFields({ typed, pattern, faults, change, alive }: LoomFields
       <legend className="h3">Your loom</legend>
       <Choose name="units" legend="Units" value={units} options={UNITS} onChoose={(other) => change({ kind: 'units', units: other })} />
       <input type="hidden" name="shown" value={units} />
-      <Select name={LOOM_KIND.key} label={LOOM_KIND.label} hint={kind.dressing} value={textOf(typed.texts, LOOM_KIND.key)} options={choice(LOOM_KIND)} error={faults[LOOM_KIND.key]} onChange={(event) => change({ kind: 'type', key: LOOM_KIND.key, text: event.currentTarget.value })} />
+      <Select name={LOOM_KIND.key} label={LOOM_KIND.label} hint={LOOM_WORDS[name].dressing} value={textOf(typed.texts, LOOM_KIND.key)} options={choice(LOOM_KIND)} error={faults[LOOM_KIND.key]} onChange={(event) => change({ kind: 'type', key: LOOM_KIND.key, text: event.currentTarget.value })} />
       {(kind.rows === 2 || !alive) && chooser(NAIL_ROWS, choice(NAIL_ROWS), 'On a loom with two rows of nails.')}
       <div className="two folds">
         {lengthField(INSIDE_WIDTH)}

@@ -1,15 +1,16 @@
 import { useMemo } from 'react';
-import { amountOf, type Amount } from '#core/craft/amounts.ts';
-import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
+import { countOf, lengthOf, massOf, type Amount } from '#core/craft/amounts/amount-types.ts';
+import { amountOfWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
 import { wovenShare } from '#core/craft/rest/woven-share.ts';
-import { loomFigures } from '#core/series/figures.ts';
+import { loomFigures } from '#core/series/loom-figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
-import { atOneScale, type MadeOnLoom } from '#islands/series/trial.ts';
+import { atOneScale } from '#islands/series/at-one-scale.ts';
+import type { MadeOnLoom } from '#islands/series/trial.ts';
 import { Figures, type Figure } from '#islands/ui/Figures.tsx';
 import { Findings } from '#islands/ui/Findings.tsx';
 import { Flag } from '#islands/ui/Flag.tsx';
@@ -95,7 +96,7 @@ const KEYS = ['ends', 'nails', 'spacing', 'wound-width', 'loom.width', 'loom.hei
 function Reckoned({ made, units }: { made: MadeOnLoom; units: Units }) {
   const keys = [...KEYS, ...Object.keys(made.piece.yarns).map((role) => `yarn.${role}`)];
   const amounts = keys.flatMap((key): Amount[] => {
-    const amount = amountOf(key, made.piece, made.plan);
+    const amount = amountOfWoven(key, made.piece, made.plan);
     return amount.ok ? [amount.value] : [];
   });
   return (

@@ -6,8 +6,8 @@ import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState } fr
 import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
 import type { KeptPiece } from '#core/craft/my-piece/judge-woven.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
+import { planWoven } from '#core/craft/frame-loom/plan-woven.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
-import { planPiece } from '#core/craft/plan.ts';
 import { Button } from '#islands/ui/Button.tsx';
 import { LoomFields } from './LoomFields.tsx';
 import { typedBefore } from '#islands/ui/typed-before.ts';
@@ -45,7 +45,7 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, rev
   }, []);
   const settled = useDeferredValue(typed);
   const judged = useMemo(() => judgeMine(settled, pattern, kept), [settled, pattern, kept]);
-  const planned = useMemo(() => planPiece(pattern, settled.units), [pattern, settled.units]);
+  const planned = useMemo(() => planWoven(pattern, settled.units), [pattern, settled.units]);
   const woven = judged.fitted ?? null;
   const now = judged.ok ? {} : Object.fromEntries(judged.problems.map(({ field, says }) => [field, says]));
   const faults = alive ? now : errors;

@@ -1,10 +1,11 @@
+import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import { chosenField, countedField, listedField, typedField, type FormHand } from '#islands/reckoner/form-hand.ts';
 import { Kept } from '#islands/reckoner/Kept.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { Field, Select } from '#islands/ui/Field.tsx';
 
-const LOOMS = LOOM_KIND_NAMES.map((value) => ({ value, label: LOOM_KINDS[value].label }));
+const LOOMS = LOOM_KIND_NAMES.map((value) => ({ value, label: LOOM_WORDS[value].label }));
 
 /** Width, loom and warp: what decides the number of ends. */
 export function SettFields({ hand }: { hand: FormHand }) {

@@ -1,7 +1,7 @@
 /** The answer in words and figures: fits or not, what would, and what changes against the pattern. */
 import type { MouseEvent } from 'react';
 import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
-import { loomFigures } from '#core/series/figures.ts';
+import { loomFigures } from '#core/series/loom-figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
 import type { Trial } from '#core/trial/try-on-loom.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';

@@ -9,7 +9,8 @@ import type { Trial } from '#core/trial/try-on-loom.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { Cloth } from '#islands/cloth/Cloth.tsx';
-import { atOneScale, type MadeOnLoom } from '#islands/series/trial.ts';
+import { atOneScale } from '#islands/series/at-one-scale.ts';
+import type { MadeOnLoom } from '#islands/series/trial.ts';
 import { Parts } from '#islands/ui/Parts.tsx';
 
 /** Both drawings without the gap between them; on a phone they shrink by a fifth together. */

@@ -1,6 +1,7 @@
 /** Answers of `POST /api/reckon`, made from the text that came in. */
 import { MOST_QUESTION_BYTES, type ReckonRefusal } from '#contracts/reckon.ts';
 import { reckon } from '#core/craft/reckon.ts';
+import { withCautions } from '#core/craft/with-cautions.ts';
 import type { Problem } from '#core/outcome.ts';
 
 const NEVER_KEPT = { 'Cache-Control': 'no-store' } as const;
@@ -25,5 +26,5 @@ export function answerQuestion(text: string, requestId: string): Response {
   if (!parsed.ok) return refusal(400, 'This is no JSON.', requestId);
   const outcome = reckon(parsed.question);
   if (!outcome.ok) return refusal(422, 'Something in this question does not work yet.', requestId, outcome.problems);
-  return new Response(JSON.stringify(outcome.value), { headers: { 'Content-Type': 'application/json; charset=utf-8', ...NEVER_KEPT } });
+  return new Response(JSON.stringify(withCautions(outcome.value)), { headers: { 'Content-Type': 'application/json; charset=utf-8', ...NEVER_KEPT } });
 }

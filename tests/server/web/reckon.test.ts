@@ -1,5 +1,6 @@
 import type { APIContext } from 'astro';
 import { describe, expect, test } from 'vitest';
+import { CRAFTS } from '#core/craft/crafts.ts';
 import { ALL, POST } from '#pages/api/reckon.ts';
 import { RATE_RULES } from '#server/web/rate-limit.ts';
 import { contextOf } from '../../support/context.ts';
@@ -27,6 +28,11 @@ describe('POST /api/reckon', () => {
     const { problems } = (await response.json()) as { problems: { code: string; path: string; message: string }[] };
     expect(problems.map(({ code, path }) => `${code} ${path}`)).toEqual(['E_RANGE /back', 'E_RANGE /spacingMm', 'E_NUM /diameterSumMm', 'E_ENUM /colour']);
     expect(problems.every(({ message }) => message.length > 10)).toBe(true);
+  });
+
+  test('hands out no plan of knotting without its cautions', async () => {
+    const response = await askFor({ what: 'piece', piece: CRAFTS.macrame.example });
+    expect(await response.json()).toMatchObject({ craft: 'macrame', cautions: CRAFTS.macrame.cautions });
   });
 
   test('points into the piece that was sent', async () => {

@@ -10,6 +10,7 @@ import { describe, expect, test } from 'vitest';
 import { RECKON_DOCUMENT, SCHEMAS_OF } from '#contracts/reckon-api/document.ts';
 import { CRAFT_NAMES, type CraftName } from '#core/craft/crafts.ts';
 import { reckon, type Question } from '#core/craft/reckon.ts';
+import { withCautions } from '#core/craft/with-cautions.ts';
 import { answerQuestion } from '#server/web/answer-question.ts';
 import { faultsOf, WIRE_ROWS } from '../../reference/wire-rows.ts';
 
@@ -147,7 +148,7 @@ describe('reader and schemas', () => {
     const answer = reckon(question);
     expect(answer).toMatchObject({ ok: true });
     expect(fits('PieceQuestion', question)).toEqual([]);
-    expect(answer.ok ? fits('Plan', answer.value) : []).toEqual([]);
+    expect(answer.ok ? fits('Plan', withCautions(answer.value)) : []).toEqual([]);
   });
 
   /** Places of a question, as lists of keys. */

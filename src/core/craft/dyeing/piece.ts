@@ -2,7 +2,7 @@
  * A dyeing as a person describes it, and the plan that comes of it. Everything goes by the mass of the dry fibre, weighed
  * before it is wetted: `percent` is of that mass. Masses are grams, baths litres.
  */
-import type { Caution, PlanCore } from '#core/craft/craft.ts';
+import type { PlanCore } from '#core/craft/craft.ts';
 
 export type FibreKind = 'wool' | 'silk' | 'other-protein' | 'cotton' | 'linen' | 'other-cellulose';
 
@@ -38,5 +38,4 @@ export interface DyePlan extends PlanCore {
   readonly steps: readonly DyeStep[];
   /** Of one bath. */
   readonly bathLitres: number;
-  readonly cautions: readonly Caution[];
 }

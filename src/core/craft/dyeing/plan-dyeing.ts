@@ -1,7 +1,6 @@
 /** Reading a dyeing and reckoning its baths. */
 import { PACE } from '#core/craft/defaults.ts';
 import { agentMass, bathLitres } from '#core/craft/dyeing/bath.ts';
-import { DYE_CAUTIONS } from '#core/craft/dyeing/cautions.ts';
 import type { DyeAgent, DyePiece, DyePlan, DyeStep, FibreKind } from '#core/craft/dyeing/piece.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import type { Findings } from '#core/craft/reading/findings.ts';
@@ -123,5 +122,5 @@ export function reckonDyeing({ fibre: { massG }, percents, liquorRatio }: Dyeing
   };
   const steps = [...bath('scour'), ...bath('tannin', 'tannin'), ...bath('mordant', 'alum', 'aluminium-acetate', 'tartar'), ...bath('dye', 'dye'), ...bath('iron', 'iron')];
   const likely = steps.length * HOURS_A_BATH;
-  return { craft: 'dyeing', steps, bathLitres: litres, massG, hours: { likely, low: likely * PACE.lowFactor, high: likely * PACE.highFactor }, cautions: DYE_CAUTIONS };
+  return { craft: 'dyeing', steps, bathLitres: litres, massG, hours: { likely, low: likely * PACE.lowFactor, high: likely * PACE.highFactor } };
 }

@@ -5,7 +5,8 @@ import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import type { BandPlan, FrameLoomPlan } from '#core/craft/plan-types.ts';
 import { lengthOf, type LengthUse } from '#core/craft/amounts/amount-types.ts';
 import { amountText } from '#core/units/format-amount.ts';
-import { loomKind } from '#core/craft/looms/looms.ts';
+import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
+import { DEFAULT_KIND, loomKind } from '#core/craft/looms/looms.ts';
 import { listed } from '#core/listed.ts';
 import type { Units } from '#core/units/units.ts';
 
@@ -96,8 +97,8 @@ function lengthTeller(units: Units): TellLength {
 
 function tellWarp(before: Made, after: Made, tellLength: TellLength): string[] {
   const told: string[] = [];
-  const [kindBefore, kind] = [loomKind(before.piece.loom), loomKind(after.piece.loom)];
-  if (kind !== kindBefore) told.push(kind.dressing);
+  const [kindBefore, kind] = [before.piece.loom.kind ?? DEFAULT_KIND, after.piece.loom.kind ?? DEFAULT_KIND];
+  if (kind !== kindBefore) told.push(LOOM_WORDS[kind].dressing);
   if (after.piece.loom.warping !== before.piece.loom.warping) {
     told.push(after.piece.loom.warping === 'zigzag' ? 'The warp goes round every nail in a zigzag.' : 'The warp steps along two nails at a time.');
   }

@@ -1,6 +1,6 @@
 /** What a loom larger than the pattern's leaves as it is, and what could grow on it, in words. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
-import { roomOnLoom } from '#core/craft/fit.ts';
+import { roomOnLoom } from '#core/craft/frame-loom/room.ts';
 import { fills } from '#core/craft/fitting/leave-out.ts';
 import { bandWords, type Made } from '#core/craft/fitting/tell-changes.ts';
 import { Findings } from '#core/craft/reading/findings.ts';

@@ -2,7 +2,9 @@
  * The ways in which a pattern can be fitted to a student's loom, each with what it comes to: the piece, its plan and
  * what changes, or why it does not fit so.
  */
-import { fitPiece, roomOnLoom, type FittedPiece } from '#core/craft/fit.ts';
+import type { FittedPiece } from '#core/craft/fit.ts';
+import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
+import { roomOnLoom } from '#core/craft/frame-loom/room.ts';
 import { changePiece } from '#core/craft/fitting/change-piece.ts';
 import { spacingOf, strandsAsTight } from '#core/craft/fitting/coarsen.ts';
 import { lowerTo } from '#core/craft/fitting/leave-out.ts';
@@ -55,7 +57,7 @@ const stands = ({ base }: Asked, path: string): boolean => !base.ok && base.prob
 const isTooNarrow = (asked: Asked): boolean => stands(asked, '/loom/insideWidthMm');
 const isTooLow = (asked: Asked): boolean => stands(asked, '/loom/insideHeightMm') || stands(asked, '/bands');
 
-const fitIn = ({ pattern, mine, units }: Asked, way: FitWay): Outcome<FittedPiece<FrameLoomPiece>> => fitPiece(pattern, { ...mine, way }, units);
+const fitIn = ({ pattern, mine, units }: Asked, way: FitWay): Outcome<FittedPiece<FrameLoomPiece>> => fitWoven(pattern, { ...mine, way }, units);
 
 /**
  * The widest piece that her loom holds, in whole steps of a rule; undefined where the loom does not tell its width or
@@ -66,7 +68,7 @@ export function widestOn(pattern: FrameLoomPiece, mine: MyPiece, units: Units): 
   if (roomMm === undefined) return undefined;
   const step = stepMm(units);
   for (let steps = Math.floor(roomMm / step + 1e-9), tries = 0; tries < TRIES && steps * step >= LEAST_WIDTH_MM; steps -= 1, tries += 1) {
-    const fitted = fitPiece(pattern, { ...mine, way: { kind: 'narrower', widthMm: steps * step } }, units);
+    const fitted = fitWoven(pattern, { ...mine, way: { kind: 'narrower', widthMm: steps * step } }, units);
     if (fitted.ok || !fitted.problems.some(isAt('/loom/insideWidthMm'))) return steps * step;
   }
   return undefined;
@@ -148,7 +150,7 @@ const canBeHelped = (base: Outcome<FittedPiece<FrameLoomPiece>>): boolean => bas
  * first, with its problems.
  */
 export function waysToFit(pattern: FrameLoomPiece, { way: _, ...mine }: MyPiece, units: Units = 'cm', chosen: readonly string[] = []): readonly WayToFit[] {
-  const base = fitPiece(pattern, mine, units);
+  const base = fitWoven(pattern, mine, units);
   const asItIs: WayToFit = { id: 'as-it-is', way: undefined, outcome: base };
   if (!canBeHelped(base)) return [asItIs];
   const asked: Asked = { pattern, mine, units, base, onLoom: changePiece(pattern, mine) };

@@ -1,7 +1,7 @@
 /** The largest piece a loom holds. */
 import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import { END_RANGE, endsSuit } from '#core/craft/ends.ts';
-import type { Settings } from '#core/craft/frame-loom/settings.ts';
+import { settingsOf, type Settings } from '#core/craft/frame-loom/settings.ts';
 import { endsForFinish } from '#core/craft/hanging.ts';
 import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import { bottomAllowance, heightAfterShrinking, topAllowance } from '#core/craft/loom-height.ts';
@@ -48,4 +48,12 @@ export function finishRoom(warp: Pick<Warp, 'yarn'> | undefined, finish: Finish 
 export function largestHeight(loom: Loom, warp: Pick<Warp, 'yarn'> | undefined, edges: Edges, settings: Settings): number {
   const { topMm, bottomMm } = bareWarp(loom, warp, edges, settings);
   return Math.max(0, heightAfterShrinking(loom.insideHeightMm - topMm - bottomMm, settings.relaxation, settings.wetShrinkage));
+}
+
+/** The largest finished size the piece's loom holds at its spacing; the width only if the loom tells its own. */
+export function roomOnLoom(piece: FrameLoomPiece): { readonly widthMm?: number; readonly heightMm: number } {
+  const settings = settingsOf(piece.allowances ?? {}, piece.mode ?? 'straight-warp', piece.beat);
+  const widthMm = largestWidth(piece.loom, piece.warp, settings);
+  const heightMm = largestHeight(piece.loom, piece.warp, piece, settings);
+  return widthMm === undefined ? { heightMm } : { widthMm, heightMm };
 }

@@ -2,12 +2,8 @@
 import type { Warping } from '#core/craft/piece.ts';
 
 export interface LoomKind {
-  /** As it stands in a list of choices. */
-  readonly label: string;
   /** What holds the warp along a rail. */
   readonly holder: { readonly one: string; readonly many: string };
-  /** How the warp goes on, in a sentence. */
-  readonly dressing: string;
   /** Ways the warp can be wound on it. */
   readonly warpings: readonly [Warping, ...Warping[]];
   /** Why no other way goes, and what does; for a kind that takes every way there is nothing to say. */
@@ -16,6 +12,14 @@ export interface LoomKind {
   readonly rows: 1 | 2;
   /** Bare warp at the edges, at least: above, where no needle passes any more, and below, for ends that are knotted or tucked. */
   readonly leastBareMm: { readonly top: number; readonly bottom: number };
+}
+
+/** What is said of it, apart from the reckoning. */
+export interface LoomWords {
+  /** As it stands in a list of choices. */
+  readonly label: string;
+  /** How the warp goes on, in a sentence. */
+  readonly dressing: string;
   /** What goes wrong on it, and what to do. */
   readonly cautions: readonly string[];
 }

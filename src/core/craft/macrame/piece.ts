@@ -5,7 +5,7 @@
  * that it gives two ends, and is knotted in sections from the top down. Below the columns, in the foot, all ends go on
  * together. Lengths are millimetres, masses grams, linear density tex; what cord a knot takes is told in cord diameters.
  */
-import type { Caution, PlanCore } from '#core/craft/craft.ts';
+import type { PlanCore } from '#core/craft/craft.ts';
 import type { Yarn, YarnTraits } from '#core/craft/piece.ts';
 import type { WarpPlan } from '#core/craft/plan-types.ts';
 
@@ -122,5 +122,4 @@ export interface MacramePlan extends PlanCore {
   readonly cut: readonly CordCut[];
   /** By role. */
   readonly yarns: Readonly<Record<string, WarpPlan>>;
-  readonly cautions: readonly Caution[];
 }

@@ -5,7 +5,6 @@
 import { HANGING, PACE } from '#core/craft/defaults.ts';
 import { bundleDiameter, leastDowelDiameter } from '#core/craft/hanging.ts';
 import { gatheringCord, HITCH_ROW, larksHead, sectionedCordLength, squareKnotCord, squareKnotsIn } from '#core/craft/macrame/cord.ts';
-import { CORD_CAUTIONS } from '#core/craft/macrame/cautions.ts';
 import type { Column, ColumnPlan, CordCut, MacramePlan, Section, SectionPlan } from '#core/craft/macrame/piece.ts';
 import { readPiece, type KnownCord, type PieceParts } from '#core/craft/macrame/read-piece.ts';
 import type { Hours, WarpPlan } from '#core/craft/plan-types.ts';
@@ -221,7 +220,6 @@ export function reckonMacrame(parts: PieceParts, findings: Findings): Omit<Macra
     yarns,
     massG,
     hours: planHours(columns, foot),
-    cautions: CORD_CAUTIONS,
   };
 }
 

@@ -1,6 +1,7 @@
 /** What a student's form comes to: her own piece with its plan, or a sentence at every field that stands in the way. */
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
-import { fitPiece, type FittedPiece, type MyPiece } from '#core/craft/fit.ts';
+import type { FittedPiece, MyPiece } from '#core/craft/fit.ts';
+import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import { waysToFit, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import type { EndsTogether, LoomKindName, NailRows, FrameLoomPiece, Warping } from '#core/craft/piece.ts';
@@ -55,7 +56,7 @@ export function waysOf(typed: TypedMine, pattern: FrameLoomPiece): { readonly mi
 function inHerWay(typed: TypedMine, pattern: FrameLoomPiece, mine: MyPiece): { readonly mine: MyPiece; readonly outcome: Outcome<FittedPiece<FrameLoomPiece>> } {
   const id = wayOf(typed);
   const chosen = id === 'as-it-is' ? undefined : waysToFit(pattern, mine, typed.units, leftOutBy(typed, pattern)).find((way) => way.id === id);
-  if (chosen === undefined) return { mine, outcome: fitPiece(pattern, mine, typed.units) };
+  if (chosen === undefined) return { mine, outcome: fitWoven(pattern, mine, typed.units) };
   return { mine: present({ ...mine, way: chosen.way }), outcome: chosen.outcome };
 }
 

@@ -1,5 +1,6 @@
 /** A student's piece half way: what is still to weave of it, and what of it can no longer change. */
-import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
+import type { MyPiece } from '#core/craft/fit.ts';
+import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import type { Made } from '#core/craft/fitting/tell-changes.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { refuseChanges } from '#core/craft/rest/fixed-on-loom.ts';
@@ -36,7 +37,7 @@ const differs = (a: MyPiece, b: MyPiece): boolean => JSON.stringify(a) !== JSON.
  * `/heightMm`, `/leftG/<role>`), or into the piece where it cannot change any more.
  */
 export function judgeWoven(woven: WovenSoFar, mine: MyPiece, made: Made, kept: KeptPiece, pattern: FrameLoomPiece, units: Units): Outcome<Halfway> {
-  const before = isBegun(woven) && isBegun(kept.woven) && differs(mine, kept.mine) ? fitPiece(pattern, kept.mine, units) : undefined;
+  const before = isBegun(woven) && isBegun(kept.woven) && differs(mine, kept.mine) ? fitWoven(pattern, kept.mine, units) : undefined;
   const refused = before?.ok === true ? refuseChanges(before.value, made, woven) : [];
   const rest = planRest(made.piece, woven, units);
   if (!rest.ok) return fail([...refused, ...rest.problems]);

@@ -1,10 +1,11 @@
 /** What is asked of a band: its technique, and what that technique wants to know. */
 import type { TechniqueName } from '#core/craft/piece.ts';
-import { TECHNIQUE_NAMES, TECHNIQUES } from '#core/craft/techniques/registry.ts';
+import { TECHNIQUE_NAMES } from '#core/craft/techniques/registry.ts';
+import { TECHNIQUE_WORDS } from '#core/craft/techniques/technique-words.ts';
 import { option, type Asked, type Option } from './asked.ts';
 
 const [firstName, ...otherNames] = TECHNIQUE_NAMES;
-const techniqueOption = (name: TechniqueName): Option => option(name, TECHNIQUES[name].words.label);
+const techniqueOption = (name: TechniqueName): Option => option(name, TECHNIQUE_WORDS[name].label);
 export const TECHNIQUE: Asked = {
   key: 'technique', kind: 'choice', label: 'Technique', needed: true,
   options: [techniqueOption(firstName), ...otherNames.map(techniqueOption)],

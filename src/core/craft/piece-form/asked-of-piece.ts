@@ -1,5 +1,6 @@
 /** What is asked once for the whole piece, group by group as the form shows it. */
 import { DEFAULT_ALLOWANCES, FRINGE_BUNDLE_ENDS, NAIL_DIAMETER_MM, TAKE_UP_UNKNOWN, TIE_MM } from '#core/craft/defaults.ts';
+import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import type { LoomKindName } from '#core/craft/piece.ts';
 import { option, type Asked, type Option } from './asked.ts';
@@ -19,7 +20,7 @@ export const LOOM: readonly Asked[] = [
 ];
 
 const [firstKind, ...otherKinds] = LOOM_KIND_NAMES;
-const kindOption = (name: LoomKindName): Option => option(name, LOOM_KINDS[name].label);
+const kindOption = (name: LoomKindName): Option => option(name, LOOM_WORDS[name].label);
 export const LOOM_KIND: Asked = { key: 'loom.kind', kind: 'choice', label: 'The loom has', options: [kindOption(firstKind), ...otherKinds.map(kindOption)] };
 
 export const NAIL_ROWS: Asked = {

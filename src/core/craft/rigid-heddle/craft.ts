@@ -6,7 +6,8 @@ import type { Craft, MadeOf, Material } from '#core/craft/craft.ts';
 import { gramsInHand } from '#core/craft/purchase.ts';
 import { present } from '#core/craft/reading/present.ts';
 import type { HeddlePiece, HeddlePlan } from '#core/craft/rigid-heddle/piece.ts';
-import { HEDDLE_CAUTIONS, planHeddle, readHeddlePiece } from '#core/craft/rigid-heddle/plan-heddle.ts';
+import { HEDDLE_CAUTIONS } from '#core/craft/rigid-heddle/cautions.ts';
+import { planHeddle, readHeddlePiece } from '#core/craft/rigid-heddle/plan-heddle.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 

@@ -2,7 +2,7 @@
  * A plain cloth woven on a rigid heddle as a person describes it, and the plan that comes of it. Lengths are millimetres,
  * masses grams, shares fractions: 0.08 is eight per cent.
  */
-import type { Caution, PlanCore } from '#core/craft/craft.ts';
+import type { PlanCore } from '#core/craft/craft.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import type { WarpPlan } from '#core/craft/plan-types.ts';
 
@@ -42,5 +42,4 @@ export interface HeddlePlan extends PlanCore {
   readonly picks: number;
   readonly weft: { readonly crimp: number; readonly stepMm: number; readonly turnMm: number; readonly pickMm: number };
   readonly yarns: { readonly warp: WarpPlan; readonly weft: WarpPlan };
-  readonly cautions: readonly Caution[];
 }

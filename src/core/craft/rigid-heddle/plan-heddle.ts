@@ -1,5 +1,4 @@
 /** Reading and reckoning a cloth on a rigid heddle: plain weave in which warp and weft bend alike. */
-import type { Caution } from '#core/craft/craft.ts';
 import { ASHENHURST_K, DEFAULT_ALLOWANCES, PACE } from '#core/craft/defaults.ts';
 import { END_RANGE, rawEnds, widthBeforeDrawIn } from '#core/craft/ends.ts';
 import { pickGeometry, pickLength, type PickGeometry } from '#core/craft/picks.ts';
@@ -20,11 +19,6 @@ import { massOf, threadOf, type Thread } from '#core/craft/yarn/thread.ts';
 export const USUAL = { drawIn: 0.08, widthShrinkage: 0.1, lengthShrinkage: 0.1, takeUp: 0.1, fringeMm: 0, gapMm: 0, wasteMm: 610, margin: DEFAULT_ALLOWANCES.marginWeft.swatch } as const;
 /** The margin of the warp is in its waste already; this is for slips of the hand. */
 export type Allowances = { readonly [K in keyof typeof USUAL]: number };
-
-export const HEDDLE_CAUTIONS: readonly Caution[] = [{
-  title: 'Hands, back, and long ends',
-  says: 'Warp with somebody beside you or in short stretches, sit so that the fell is at the height of your elbows, rest every half hour, and stop when something hurts or tingles. Long ends and loops stay out of reach of small children. This is general information: follow your local rules and the loom maker’s word, and ask a qualified person where you are not sure.',
-}];
 
 const length = (name: string, max: number = LONGEST_MM): NumberRule => ({ name, min: 'over-zero', max, unit: 'mm' });
 const share = (name: string, max: number): NumberRule => ({ name, min: 0, max, unit: 'share' });
@@ -126,6 +120,6 @@ export function reckonHeddle(parts: Parts, findings: Findings): Omit<HeddlePlan,
   const likely = (picks * secondsPerRow(ends.count)) / 3600 + ends.count / PACE.warpEndsPerHour + PACE.finishingHours;
   return {
     craft: 'rigid-heddle', ends, warpEndMm, picks, weft: { crimp: laid.crimp, stepMm: laid.stepMm, turnMm: laid.turnMm, pickMm }, yarns,
-    massG: yarns.warp.massG + yarns.weft.massG, hours: { likely, low: likely * PACE.lowFactor, high: likely * PACE.highFactor }, cautions: HEDDLE_CAUTIONS,
+    massG: yarns.warp.massG + yarns.weft.massG, hours: { likely, low: likely * PACE.lowFactor, high: likely * PACE.highFactor },
   };
 }

@@ -11,6 +11,7 @@ import {
   type BandReport,
   type DressedLoom,
   type Technique,
+  type TechniqueWords,
   type Woven,
 } from '#core/craft/techniques/technique.ts';
 
@@ -81,14 +82,15 @@ function weave(band: HemStitchBand, _heightMm: number, loom: DressedLoom): Woven
   return { counts: { stitches }, uses: [rowsOf(band.yarn, 'shuttle', 1, threadMm, thread)], work: { hemBundles: stitches } };
 }
 
+export const HEM_STITCH_WORDS: TechniqueWords = {
+  label: 'Hem-stitch',
+  how: 'The needle goes behind a bundle of ends, round it, behind it again and up into the cloth.',
+  tools: ['blunt needle'],
+  cautions: ['Leave a tail four times the width before you begin: it cannot be lengthened.', 'Sew while the warp is still tight on the loom.'],
+};
+
 /** Sewn into the cloth's edge, it adds no height. */
 export const hemStitch: Technique<'hem-stitch'> = {
-  words: {
-    label: 'Hem-stitch',
-    how: 'The needle goes behind a bundle of ends, round it, behind it again and up into the cloth.',
-    tools: ['blunt needle'],
-    cautions: ['Leave a tail four times the width before you begin: it cannot be lengthened.', 'Sew while the warp is still tight on the loom.'],
-  },
   read,
   roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: () => 0,

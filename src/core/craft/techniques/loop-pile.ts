@@ -3,7 +3,7 @@ import type { LoopPileBand, LoopSize } from '#core/craft/piece.ts';
 import { pickLength } from '#core/craft/picks.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { BAND_HEIGHT, readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
-import { pickKey, picksOn, rowsOf, threadOn, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+import { pickKey, picksOn, rowsOf, threadOn, type DressedLoom, type Technique, type TechniqueWords, type Woven } from '#core/craft/techniques/technique.ts';
 
 /** Weft of one loop: round a rod and pinched at its foot, or twice the height it is drawn to. */
 export function loopLength(size: LoopSize, loftMm: number): number {
@@ -44,13 +44,14 @@ function weave(band: LoopPileBand, _heightMm: number, loom: DressedLoom): Woven 
   };
 }
 
+export const LOOP_PILE_WORDS: TechniqueWords = {
+  label: 'Loop pile',
+  how: 'A row of tabby is laid loosely, and drawn up between the ends into loops, over a rod or by hand.',
+  tools: ['rod, for loops all alike', 'comb'],
+  cautions: ['Leave the rod in until the next row is beaten down.', 'Weave two rows of tabby after it, or a pull at one loop draws out its neighbours.'],
+};
+
 export const loopPile: Technique<'loop-pile'> = {
-  words: {
-    label: 'Loop pile',
-    how: 'A row of tabby is laid loosely, and drawn up between the ends into loops, over a rod or by hand.',
-    tools: ['rod, for loops all alike', 'comb'],
-    cautions: ['Leave the rod in until the next row is beaten down.', 'Weave two rows of tabby after it, or a pull at one loop draws out its neighbours.'],
-  },
   read: (fields) => ({
     technique: 'loop-pile',
     ...readName(fields),

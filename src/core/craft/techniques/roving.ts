@@ -2,7 +2,7 @@
 import type { RovingBand } from '#core/craft/piece.ts';
 import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { BAND_HEIGHT, readName, readRole } from '#core/craft/techniques/read-rules.ts';
-import { rowsOf, threadOn, type BandReport, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+import { rowsOf, threadOn, type BandReport, type DressedLoom, type Technique, type TechniqueWords, type Woven } from '#core/craft/techniques/technique.ts';
 
 /** Length of a float that rises `bulge` over a base: the arc of a parabola. */
 export function bulgeArc(base: number, bulge: number): number {
@@ -66,13 +66,14 @@ function weave(band: RovingBand, _heightMm: number, loom: DressedLoom): Woven {
   return { counts: {}, uses: [rowsOf(band.yarn, 'by-the-row', band.passes ?? 1, passMm, threadOn(loom, band.yarn))], work: {} };
 }
 
+export const ROVING_WORDS: TechniqueWords = {
+  label: 'Roving',
+  how: 'Unspun fibre goes over some ends and under as many, and is puffed up where it lies on the face.',
+  tools: [],
+  cautions: ['Tear it to length, do not cut it: torn ends vanish in the cloth.', 'Weave firm tabby on both sides of it, or it slides.'],
+};
+
 export const roving: Technique<'roving'> = {
-  words: {
-    label: 'Roving',
-    how: 'Unspun fibre goes over some ends and under as many, and is puffed up where it lies on the face.',
-    tools: [],
-    cautions: ['Tear it to length, do not cut it: torn ends vanish in the cloth.', 'Weave firm tabby on both sides of it, or it slides.'],
-  },
   read,
   roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: (band) => band.heightMm,

@@ -5,7 +5,7 @@ import type { Fields, NumberRule } from '#core/craft/reading/fields.ts';
 import { present } from '#core/craft/reading/present.ts';
 import { roundUpTo } from '#core/craft/rounding.ts';
 import { BAND_HEIGHT, LONGEST_MM, readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
-import { threadOn, type BandReport, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+import { threadOn, type BandReport, type DressedLoom, type Technique, type TechniqueWords, type Woven } from '#core/craft/techniques/technique.ts';
 import { diameterTogether } from '#core/craft/yarn/diameter.ts';
 
 export interface RyaKnot {
@@ -113,14 +113,15 @@ function weave(band: RyaBand, _heightMm: number, loom: DressedLoom): Woven {
   };
 }
 
+export const RYA_WORDS: TechniqueWords = {
+  label: 'Rya fringe',
+  how: 'Cut strands are laid over two ends, drawn out between them from behind, and pulled down to the row.',
+  tools: ['card to wind the strands on', 'scissors', 'comb'],
+  cautions: ['Pull both ends of a knot down together, or it sits askew.', 'Weave a row or two of tabby after each row of knots: they hold nothing by themselves.', 'Long fringe is a danger to small children: hang it out of their reach.'],
+};
+
 /** The band counts its own strands, so the number the yarn is otherwise taken together in does not matter here. */
 export const rya: Technique<'rya'> = {
-  words: {
-    label: 'Rya fringe',
-    how: 'Cut strands are laid over two ends, drawn out between them from behind, and pulled down to the row.',
-    tools: ['card to wind the strands on', 'scissors', 'comb'],
-    cautions: ['Pull both ends of a knot down together, or it sits askew.', 'Weave a row or two of tabby after each row of knots: they hold nothing by themselves.', 'Long fringe is a danger to small children: hang it out of their reach.'],
-  },
   read,
   roles: (band) => [{ key: 'yarn', role: band.yarn }],
   height: (band) => band.heightMm,

@@ -15,6 +15,7 @@ import {
   type BandReport,
   type DressedLoom,
   type Technique,
+  type TechniqueWords,
   type Woven,
 } from '#core/craft/techniques/technique.ts';
 import { pickLength } from '#core/craft/picks.ts';
@@ -121,13 +122,14 @@ function weave(band: SoumakBand, _heightMm: number, loom: DressedLoom): Woven {
   };
 }
 
+export const SOUMAK_WORDS: TechniqueWords = {
+  label: 'Soumak',
+  how: 'The weft goes over some ends and back under fewer, and so wraps its way along the row in a ridge.',
+  tools: ['blunt needle', 'comb'],
+  cautions: ['Wrapped tightly it draws the cloth in: let each stitch lie round its ends without pulling.', 'A row or two of tabby between ridges holds them.'],
+};
+
 export const soumak: Technique<'soumak'> = {
-  words: {
-    label: 'Soumak',
-    how: 'The weft goes over some ends and back under fewer, and so wraps its way along the row in a ridge.',
-    tools: ['blunt needle', 'comb'],
-    cautions: ['Wrapped tightly it draws the cloth in: let each stitch lie round its ends without pulling.', 'A row or two of tabby between ridges holds them.'],
-  },
   read,
   roles: (band) => [
     { key: 'yarn', role: band.yarn },

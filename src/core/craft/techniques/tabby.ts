@@ -28,6 +28,7 @@ import {
   type LaidPicks,
   type PickOf,
   type Technique,
+  type TechniqueWords,
   type Woven,
   type YarnUse,
 } from '#core/craft/techniques/technique.ts';
@@ -228,16 +229,17 @@ function weave(band: TabbyBand, heightMm: number, loom: DressedLoom, fromRow = 0
   };
 }
 
+export const TABBY_WORDS: TechniqueWords = {
+  label: 'Tabby',
+  how: 'The weft goes over one end and under the next, and the other way round in the row that follows.',
+  tools: ['shuttle or butterfly', 'comb'],
+  cautions: [
+    'Lay each row in a hill before you beat it down, or the edges draw in.',
+    'Where colours meet at the same end for more than two centimetres, sew the slit or join them.',
+  ],
+};
+
 export const tabby: Technique<'tabby'> = {
-  words: {
-    label: 'Tabby',
-    how: 'The weft goes over one end and under the next, and the other way round in the row that follows.',
-    tools: ['shuttle or butterfly', 'comb'],
-    cautions: [
-      'Lay each row in a hill before you beat it down, or the edges draw in.',
-      'Where colours meet at the same end for more than two centimetres, sew the slit or join them.',
-    ],
-  },
   read,
   roles: (band) => [
     { key: 'yarn', role: band.yarn, picks: pickIn(band, band.yarn) },

@@ -119,7 +119,6 @@ export interface TechniqueWords {
 }
 
 export interface Technique<N extends TechniqueName> {
-  readonly words: TechniqueWords;
   /** Reads its band; keys that nobody read are refused by the caller. */
   read(fields: Fields): BandByTechnique[N];
   roles(band: BandByTechnique[N]): readonly NamedRole[];

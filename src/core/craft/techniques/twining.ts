@@ -4,7 +4,7 @@ import type { NumberRule } from '#core/craft/reading/fields.ts';
 import { present } from '#core/craft/reading/present.ts';
 import { ceilSafe } from '#core/craft/rounding.ts';
 import { readName, readRole, ROWS } from '#core/craft/techniques/read-rules.ts';
-import { loftSum, rowsOf, threadOn, type DressedLoom, type Technique, type Woven } from '#core/craft/techniques/technique.ts';
+import { loftSum, rowsOf, threadOn, type DressedLoom, type Technique, type TechniqueWords, type Woven } from '#core/craft/techniques/technique.ts';
 
 const ENDS_PER_TWIST: NumberRule = { name: 'Ends between two crossings', min: 1, max: 100, whole: true };
 
@@ -73,14 +73,15 @@ function weave(band: TwiningBand, _heightMm: number, loom: DressedLoom): Woven {
   return { counts: { stitches }, uses: [rowsOf(band.yarn, 'by-the-row', band.rows, rowMm, thread)], work: { stitches } };
 }
 
+export const TWINING_WORDS: TechniqueWords = {
+  label: 'Twining',
+  how: 'Two strands cross between the ends, so that one lies before each end and one behind it.',
+  tools: ['blunt needle'],
+  cautions: ['Twist always the same way, or the row opens where it turns.', 'Its first row sets the ends: measure their spacing before you go on.'],
+};
+
 /** A row is taken to be as high as its yarn lies free, as in soumak. */
 export const twining: Technique<'twining'> = {
-  words: {
-    label: 'Twining',
-    how: 'Two strands cross between the ends, so that one lies before each end and one behind it.',
-    tools: ['blunt needle'],
-    cautions: ['Twist always the same way, or the row opens where it turns.', 'Its first row sets the ends: measure their spacing before you go on.'],
-  },
   read: (fields) => ({
     technique: 'twining',
     ...readName(fields),

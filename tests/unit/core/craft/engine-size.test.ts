@@ -4,10 +4,8 @@ import { build } from 'esbuild';
 import { expect, test } from 'vitest';
 
 const MOST_BYTES = 25_000;
-/** All four engines together. */
-const MOST_BYTES_OF_ALL = 28_000;
-/** A whole island besides React: its fields and words, and of every craft the engine, amounts, changes and drawing. */
-const MOST_BYTES_OF_ISLAND = 80_000;
+/** A whole island besides React: its fields and words, and of its craft the engine, amounts, changes and drawing. */
+const MOST_BYTES_OF_ISLAND = 72_000;
 
 interface Bundle {
   readonly code: Uint8Array;
@@ -23,11 +21,11 @@ async function bundle(contents: string): Promise<Bundle> {
   return { code: outputFiles[0]?.contents ?? new Uint8Array(), files: Object.keys(metafile.inputs) };
 }
 
-test('the engine that plans a piece of any craft comes in less than 28 kB, and draws and explains nothing', async () => {
+test('the engine that plans a piece of any craft comes in less than 25 kB, and draws and explains nothing', async () => {
   const { code, files } = await bundle("export { planPiece } from '#core/craft/plan.ts';");
   const { byteLength } = brotliCompressSync(code);
-  expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES_OF_ALL);
-  expect(files.filter((file) => /craft\/(?:cloth|show-how|figures|amounts)\//u.test(file))).toEqual([]);
+  expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES);
+  expect(files.filter((file) => /craft\/(?:cloth|show-how|figures|amounts)\/|cautions|-words/u.test(file))).toEqual([]);
 });
 
 test.each([
@@ -40,9 +38,14 @@ test.each([
   expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES);
 });
 
-test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx', 'series/TrialLooms.tsx'])('the island %s loads no figure of a technique, and stays below 80 kB', async (island) => {
+test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx', 'series/TrialLooms.tsx'])('the island %s loads no figure of a technique, and stays below 72 kB', async (island) => {
   const { code, files } = await bundle(`export * from './src/islands/${island}';`);
   const { byteLength } = brotliCompressSync(code);
   expect(byteLength, `${byteLength} bytes`).toBeLessThan(MOST_BYTES_OF_ISLAND);
   expect(files.filter((file) => /craft\/(?:show-how|figures\/kinds|macrame\/figures)\//u.test(file))).toEqual([]);
+});
+
+test.each(['piece-form/PieceForm.tsx', 'piece/MyPiece.tsx'])('the island %s, which knows woven pieces only, loads no other craft', async (island) => {
+  const { files } = await bundle(`export * from './src/islands/${island}';`);
+  expect(files.filter((file) => /craft\/(?:crafts\.ts|macrame|dyeing|rigid-heddle)/u.test(file))).toEqual([]);
 });

@@ -1,6 +1,7 @@
 import { readFileSync } from 'node:fs';
 import { describe, expect, test } from 'vitest';
-import { fitPiece, roomOnLoom, type MyPiece } from '#core/craft/fit.ts';
+import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
+import { roomOnLoom } from '#core/craft/frame-loom/room.ts';
 import { nthNailFor } from '#core/craft/fitting/change-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { PLAIN_PIECE, pieceOf, pieceWith } from './a-piece.ts';

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { fitPiece } from '#core/craft/fit.ts';
+import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
 import { LOOM_KIND_NAMES, LOOM_KINDS } from '#core/craft/looms/looms.ts';
 import { evenShare, spacingRows, unevenness } from '#core/craft/nails.ts';
 import { bestSpacing, offeredSpacings } from '#core/craft/offered-spacings.ts';
@@ -11,7 +12,8 @@ const on = (loom: Partial<Loom>) => pieceWith({ loom: { ...PLAIN_PIECE.loom, ...
 
 describe('kinds of loom', () => {
   test.each(LOOM_KIND_NAMES)('a %s says how it is dressed, what goes wrong on it, and why a way of winding does not go', (name) => {
-    const { dressing, cautions, warpings, otherWarping, leastBareMm } = LOOM_KINDS[name];
+    const { dressing, cautions } = LOOM_WORDS[name];
+    const { warpings, otherWarping, leastBareMm } = LOOM_KINDS[name];
     for (const sentence of [dressing, ...cautions]) expect(sentence).toMatch(/^[A-Z].*\.$/u);
     expect(cautions.length).toBeGreaterThan(0);
     expect(warpings.length === 2).toBe(otherWarping === undefined);

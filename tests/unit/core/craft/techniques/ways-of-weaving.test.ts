@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
-import { TECHNIQUE_NAMES, TECHNIQUES } from '#core/craft/techniques/registry.ts';
+import { TECHNIQUE_NAMES } from '#core/craft/techniques/registry.ts';
+import { TECHNIQUE_WORDS } from '#core/craft/techniques/technique-words.ts';
 import { pieceOf, pieceWith, planOf, problemsOf, refusals, warningsOf } from '../a-piece.ts';
 
 const tabby = { technique: 'tabby', yarn: 'ground', heightMm: 100 } as const;
@@ -103,7 +104,7 @@ describe('twining', () => {
 });
 
 test.each(TECHNIQUE_NAMES)('%s says what it is called, what the hand does and what to heed', (name) => {
-  const { label, how, cautions } = TECHNIQUES[name].words;
+  const { label, how, cautions } = TECHNIQUE_WORDS[name];
   expect(label).toMatch(/^[A-Z]/u);
   for (const sentence of [how, ...cautions]) expect(sentence).toMatch(/^[A-Z].*\.$/u);
   expect(cautions.length).toBeGreaterThan(0);
