@@ -1,4 +1,5 @@
-import { useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, type SyntheticEvent } from 'react';
+import { lazy, useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, type SyntheticEvent } from 'react';
+import type { StudentLoom } from '#contracts/looms.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import type { Act } from '#core/craft/piece-form/change-typed.ts';
@@ -15,6 +16,7 @@ import { bandWords, type BandWords } from './band-words.ts';
 import { FormHead, type SaveState } from './FormHead.tsx';
 import { HandsContext, ShownContext, type Hands, type Shown } from './hands.ts';
 import { useSame, useSameEntries } from './keep-same.ts';
+import { Later } from './Later.tsx';
 import { AllowanceFields, BeatFields, HangingFields, SizeAndLoom, WarpFields } from './LoomFields.tsx';
 import { OtherPieceNotice } from './OtherPieceNotice.tsx';
 import { pieceFormAfter, pieceFormBegins, toldNow } from './piece-form-state.ts';
@@ -22,6 +24,8 @@ import { PieceDrawing } from './PieceDrawing.tsx';
 import { PiecePlan } from './PiecePlan.tsx';
 import { usePieceDraft } from './use-piece-draft.ts';
 import { useUndoKeys } from './use-undo-keys.ts';
+
+const ThreeLooms = lazy(async () => ({ default: (await import('./ThreeLooms.tsx')).ThreeLooms }));
 
 export interface PieceFormProps {
   /** Address the form is sent to. */
@@ -40,6 +44,8 @@ export interface PieceFormProps {
   /** Band to be open, by its place. */
   readonly openBand: number | null;
   readonly saved: SaveState;
+  /** Looms of students who have a seat. */
+  readonly looms: readonly StudentLoom[];
 }
 
 /** A form that could be woven. */
@@ -58,7 +64,7 @@ function wordsById({ piece, plan, typed }: Made, cloth: WovenPiece): ReadonlyMap
 }
 
 /** The pattern piece: fields, drawing and numbers, all of one form. Every letter is reckoned and drawn before the next frame. */
-export function PieceForm({ action, series, revision, typed: first, isTried, isChanged, summary, isOver, openBand, saved }: PieceFormProps) {
+export function PieceForm({ action, series, revision, typed: first, isTried, isChanged, summary, isOver, openBand, saved, looms }: PieceFormProps) {
   const [state, tell] = useReducer(pieceFormAfter, null, () => pieceFormBegins(first, isTried));
   const { typed } = state;
   const { units, yarns, texts, bands } = typed;
@@ -114,6 +120,7 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
         <PiecePlan made={made} isOld={!judged.ok && made !== null} warnings={warnings} yarns={yarns} units={units} />
         <p className="hide" role="status">{state.news}</p>
       </form>
+      {made !== null && <Later title="Try it on three students’ looms" className="fold try-looms">{() => <ThreeLooms piece={made.piece} name={series.name} units={units} students={looms} />}</Later>}
       <ToastRegion toasts={toasts} />
     </ShownContext></HandsContext>
   );

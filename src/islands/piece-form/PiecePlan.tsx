@@ -1,4 +1,4 @@
-import { memo } from 'react';
+import { lazy, memo } from 'react';
 import type { Found } from '#core/craft/piece-form/judge-typed.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
@@ -13,7 +13,10 @@ import { fieldId } from '#islands/ui/field-id.ts';
 import { Findings } from '#islands/ui/Findings.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { YarnDot } from '#islands/ui/YarnDot.tsx';
+import { Later } from './Later.tsx';
 import { placeOfField } from './piece-form-state.ts';
+
+const PlanWorkings = lazy(async () => ({ default: (await import('./PlanWorkings.tsx')).PlanWorkings }));
 
 interface PiecePlanProps {
   /** Null while nothing could be reckoned yet. */
@@ -36,6 +39,7 @@ export const PiecePlan = memo(function PiecePlan({ made, isOld, warnings, yarns,
     <aside className="plan stack" aria-label="Plan">
       <h2 className="h3">Plan</h2>
       {made === null ? <p className="quiet">Ends, rows, yarn and hours stand here once the piece can be woven.</p> : <Numbers {...made} units={units} isOld={isOld} />}
+      {made !== null && <Later title="How it is reckoned">{() => <PlanWorkings piece={made.piece} units={units} />}</Later>}
       {warnings.length > 0 && (
         <div className="notice">
           <h3 className="h4">Worth a look</h3>

@@ -5,6 +5,8 @@ export function useUndoKeys(undo: () => void, redo: () => void): void {
   useEffect(() => {
     const onKey = (event: KeyboardEvent) => {
       if (!(event.ctrlKey || event.metaKey) || event.altKey) return;
+      // Fields of another form have their own memory.
+      if (event.target instanceof Element && event.target.matches('input, select, textarea') && event.target.closest('.piece-form') === null) return;
       const key = event.key.toLowerCase();
       if (key !== 'z' && key !== 'y') return;
       event.preventDefault();

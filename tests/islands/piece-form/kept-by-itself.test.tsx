@@ -24,7 +24,7 @@ beforeEach(() => {
 afterEach(() => { cleanup(); vi.useRealTimers(); vi.unstubAllGlobals(); localStorage.clear(); });
 
 const open = (): void => {
-  render(<PieceForm action="?" series={{ slug: 'weir', name: 'Weir' }} revision={3} typed={typed} isTried={false} isChanged={false} isOver={false} summary="" openBand={null} saved={{ words: 'Nothing saved yet', isDraft: false, pieceWords: null, asideWords: null }} />);
+  render(<PieceForm action="?" series={{ slug: 'weir', name: 'Weir' }} revision={3} typed={typed} isTried={false} isChanged={false} isOver={false} summary="" openBand={null} saved={{ words: 'Nothing saved yet', isDraft: false, pieceWords: null, asideWords: null }} looms={[]} />);
 };
 const field = (name: string): HTMLInputElement => document.querySelector<HTMLInputElement>(`[name="${name}"]`) ?? expect.fail(`no ${name}`);
 const retype = (text: string): void => { fireEvent.change(field('size.widthMm'), { target: { value: text } }); };

@@ -81,7 +81,7 @@ const small: FrameLoomPiece = {
   beat: { picksPerWeftDiameter: 0.7 }, yarns: { ground: { metresPer100g: 180 } },
   bands: [{ technique: 'tabby', yarn: 'ground', heightMm: 60 }, { technique: 'tabby', name: 'sky', yarn: 'ground', fill: true }],
 };
-const props: PieceFormProps = { action: '?_action=x', series: { slug: 'low-tide', name: 'Low Tide' }, revision: 3, typed: typePiece(small, 'cm'), isTried: false, isChanged: false, isOver: false, summary: '', openBand: null, saved: { words: 'Saved today 14:02', isDraft: false, pieceWords: 'today 14:02', asideWords: null } };
+const props: PieceFormProps = { action: '?_action=x', series: { slug: 'low-tide', name: 'Low Tide' }, revision: 3, typed: typePiece(small, 'cm'), isTried: false, isChanged: false, isOver: false, summary: '', openBand: null, saved: { words: 'Saved today 14:02', isDraft: false, pieceWords: 'today 14:02', asideWords: null }, looms: [] };
 
 const open = (): void => { render(<PieceForm {...props} />); };
 
