@@ -12,13 +12,16 @@ interface Bundle {
   readonly files: readonly string[];
 }
 
-/** The module and all it needs, as the site's build makes it. */
+/** The module and all it needs before it can begin, as the site's build makes it: what is loaded later, when it is opened, does not count. */
 async function bundle(contents: string): Promise<Bundle> {
   const { outputFiles, metafile } = await build({
     stdin: { contents, resolveDir: process.cwd(), loader: 'ts' },
-    bundle: true, minify: true, jsx: 'automatic', external: ['react', 'react-dom', 'astro:*'], format: 'esm', platform: 'browser', target: 'es2022', write: false, metafile: true,
+    bundle: true, minify: true, splitting: true, outdir: 'nowhere', jsx: 'automatic', external: ['react', 'react-dom', 'astro:*'], format: 'esm', platform: 'browser', target: 'es2022', write: false, metafile: true,
   });
-  return { code: outputFiles[0]?.contents ?? new Uint8Array(), files: Object.keys(metafile.inputs) };
+  const needed = new Set(Object.entries(metafile.outputs).filter(([, { entryPoint }]) => entryPoint === '<stdin>').map(([path]) => path));
+  for (const path of needed) for (const { kind, path: next, external } of metafile.outputs[path]?.imports ?? []) if (kind === 'import-statement' && external !== true) needed.add(next);
+  const chunks = outputFiles.filter(({ path }) => [...needed].some((one) => path.endsWith(`/${one}`)));
+  return { code: Buffer.concat(chunks.map(({ contents: code }) => code)), files: [...needed].flatMap((path) => Object.keys(metafile.outputs[path]?.inputs ?? {})) };
 }
 
 test('the engine that plans a piece of any craft comes in less than 25 kB, and draws and explains nothing', async () => {
