@@ -139,6 +139,7 @@ function readWeave(fields: Fields, mode: WeaveMode): Weave {
 
 function readBeat(fields: Fields, mode: WeaveMode): RowBeat {
   if (mode === 'balanced' && fields.take('beat') === undefined) return 'as-ends';
+  if (!fields.has('beat')) fields.reject('E_ENUM', 'beat', 'Say how closely the rows lie. As close as the ends is for balanced cloth alone.');
   const group = fields.group('beat', 'Beat');
   const swatch = group.has('picksPerCm');
   if (swatch && group.has('picksPerWeftDiameter')) {
