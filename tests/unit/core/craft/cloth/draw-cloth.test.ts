@@ -56,6 +56,12 @@ describe('drawing a cloth', () => {
     expect(() => drawCloth(wovenPiece(), { id: 'a"><script>', as: 'swatch', width: 40 })).toThrow(RangeError);
   });
 
+  it('refuses a picture narrower than 8 px or wider than 4000, and an id that is part of a longer word', () => {
+    for (const width of [7.9, 4001, Number.NaN, -5]) expect(() => drawCloth(wovenPiece(), { id: 'a', as: 'swatch', width }), String(width)).toThrow(RangeError);
+    for (const width of [8, 4000]) expect(() => drawCloth(CORDS, { id: 'a', as: 'swatch', width })).not.toThrow();
+    expect(() => drawCloth(CORDS, { id: '1-a', as: 'swatch', width: 40 })).toThrow(RangeError);
+  });
+
   it('keeps a name with signs of markup as words', () => {
     const svg = drawCloth(wovenPiece({ title: '"><script>alert(1)</script>' }), { id: 'a', as: 'hanging', width: 200 });
     expect(svg).not.toContain('<script');

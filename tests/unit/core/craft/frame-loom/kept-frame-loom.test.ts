@@ -1,6 +1,7 @@
 import { describe, expect, test } from 'vitest';
+import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
-import { expectKept } from '../../../../support/kept.ts';
+import { expectKept, thousandths } from '../../../../support/kept.ts';
 import { tellFindings, tellPiece } from '../../../../support/tell-piece.ts';
 import { pieceOf, pieceWith, planOf, PLAIN_PIECE, warningsOf } from '../a-piece.ts';
 import { FILL, loom, WOVEN_PIECES } from './woven-pieces.ts';
@@ -11,6 +12,17 @@ describe.each(Object.entries(WOVEN_PIECES))('a woven piece: %s', (name, piece) =
   test('is reckoned and told as it was found right', () => {
     const { workings: _workings, ...told } = tellPiece(piece) as { workings: unknown };
     expectKept(file('told'), name, told);
+  });
+});
+
+/** Rows of a shape are many: the first, every tenth and the last tell its slope. */
+const everyTenth = (_span: unknown, index: number, all: readonly unknown[]): boolean => index % 10 === 0 || index === all.length - 1;
+
+describe('what is drawn of a woven piece', () => {
+  test.each(Object.entries(WOVEN_PIECES))('%s', (name, piece) => {
+    const cloth = clothPieceOf(piece, planOf(piece), 'Low Tide');
+    const bands = cloth.bands.map((band) => (band.technique === 'tabby' ? { ...band, shapes: band.shapes.map((shape) => ({ ...shape, spans: shape.spans.filter(everyTenth).map(({ row, from, to }) => `${String(row)}: ${String(from)} to ${String(to)}`) })) } : band));
+    expectKept(file('cloth'), name, thousandths({ ...cloth, bands }));
   });
 });
 
