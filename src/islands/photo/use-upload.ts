@@ -1,7 +1,8 @@
 import { useCallback, useEffect, useReducer, useRef } from 'react';
 import { photoFault } from './photo-rules.ts';
-import { uploadAfter, waitMs, type UploadState } from './upload-state.ts';
+import { uploadAfter, type UploadState } from './upload-state.ts';
 import type { StartUpload, Upload } from './uploader.ts';
+import { useTryingAgain } from './use-trying-again.ts';
 
 export interface PhotoOnItsWay {
   readonly state: UploadState;
@@ -19,18 +20,7 @@ export function useUpload(start: StartUpload, fault: string | undefined): PhotoO
     upload.current = null;
   }, []);
   useEffect(() => end, [end]);
-
-  const tries = state.at === 'waiting' ? state.tries : 0;
-  useEffect(() => {
-    if (tries === 0) return;
-    const again = (): void => { upload.current?.again(); };
-    const timer = setTimeout(again, waitMs(tries));
-    window.addEventListener('online', again);
-    return () => {
-      clearTimeout(timer);
-      window.removeEventListener('online', again);
-    };
-  }, [tries]);
+  useTryingAgain(upload, state.at === 'waiting' ? state.tries : 0);
 
   const choose = useCallback((file: File | undefined) => {
     if (file === undefined) return;

@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useReducer, useRef } from 'react';
 import type { VideoOnItsWay } from '#contracts/video.ts';
 import { videoFault } from '#core/video/limits.ts';
-import { waitMs } from '#islands/photo/upload-state.ts';
+import { useTryingAgain } from '#islands/photo/use-trying-again.ts';
 import { videoUploadAfter, type VideoUploadState } from './video-upload-state.ts';
 import type { StartVideoUpload, VideoTarget, VideoUpload } from './video-uploader.ts';
 
@@ -23,18 +23,7 @@ export function useVideoUpload(start: StartVideoUpload, target: Omit<VideoTarget
   const [state, tell] = useReducer(videoUploadAfter, { at: 'choosing' });
   const upload = useRef<VideoUpload | null>(null);
   useEffect(() => () => { upload.current?.leave(); }, []);
-
-  const tries = state.at === 'waiting' ? state.tries : 0;
-  useEffect(() => {
-    if (tries === 0) return;
-    const again = (): void => { upload.current?.again(); };
-    const timer = setTimeout(again, waitMs(tries));
-    window.addEventListener('online', again);
-    return () => {
-      clearTimeout(timer);
-      window.removeEventListener('online', again);
-    };
-  }, [tries]);
+  useTryingAgain(upload, state.at === 'waiting' ? state.tries : 0);
 
   const isOnItsWay = state.at === 'sending' || state.at === 'waiting';
   useEffect(() => {

@@ -1,23 +1,14 @@
 /** Videos as their teacher has them on her table. */
 import { Op, QueryTypes } from 'sequelize';
-import type { MediaDetail, MediaFiles, MediaState } from '#contracts/media.ts';
+import type { MediaDetail, MediaFiles } from '#contracts/media.ts';
+import type { VideoOnItsWay } from '#contracts/video.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { Lesson, Media, Series, SeriesMedia, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
 
 /** A video that is not ready, or will not be. How much of it has come is told by its file. */
-export interface ArrivingVideo {
-  readonly video: string;
-  readonly name: string;
-  readonly title: string;
-  readonly fileName: string;
-  readonly state: MediaState;
-  readonly byteCount: number;
-  readonly permille: number;
-  readonly before: number | null;
-  readonly failure: string | null;
-}
+export type ArrivingVideo = Omit<VideoOnItsWay, 'arrivedBytes'>;
 
 export interface ReadyVideo {
   readonly video: string;
