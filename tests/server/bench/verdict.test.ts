@@ -189,6 +189,8 @@ describe('the queue', () => {
     const first = await photoOf(all, new Date('2026-11-29T08:00:00Z'));
     const inHand = await photoOf(all, new Date('2026-11-30T08:00:00Z'));
     const desk = await benchDesk(await actorOf(all.teacher), inHand.publicId);
+    expect(desk.inHand?.placeInThread).toBe(1);
+    expect((await benchDesk(await actorOf(all.teacher), first.publicId)).inHand).toMatchObject({ placeInThread: 0, earlier: [{ publicId: elsewhere.publicId }] });
     expect(desk.inHand?.earlier.map(({ publicId, partNumber }) => [publicId, partNumber])).toEqual([[first.publicId, 1], [elsewhere.publicId, 2]]);
   });
 });

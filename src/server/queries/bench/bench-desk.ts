@@ -26,6 +26,8 @@ export interface PhotoInHand {
   readonly fitted: FittedPiece | null;
   /** Of this checkpoint, the photo in hand among them. */
   readonly thread: readonly ThreadPhoto[];
+  /** Index of the photo in hand among them: newer ones may wait behind it. */
+  readonly placeInThread: number;
   /** Of the whole seat, the newest first, without the one in hand. */
   readonly earlier: readonly EarlierPhoto[];
   readonly phrases: readonly string[];
@@ -53,7 +55,7 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, earlier, phrases, takenBack },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread: thread.findIndex(({ publicId }) => publicId === photo.publicId), earlier, phrases, takenBack },
   };
 }
 
