@@ -33,6 +33,8 @@ export const CaptionsForm = z.object({ ...draft, vtt: z.string().max(CAPTION_LIM
 export const ChaptersForm = z.object({ ...draft, chapters: z.string().max(10_000, 'This is too much for a list of chapters.').default('') });
 export const PosterForm = z.object({ ...draft, poster: z.string().regex(/^[a-z0-9-]{1,40}$/, 'Choose one of the pictures.') });
 export const PutVideoInForm = z.object({ lesson: publicId, name });
+export const DeleteVideoForm = z.object({ series: z.string().regex(/^[a-z0-9-]{1,64}$/), name });
+export type DeleteVideoInput = z.output<typeof DeleteVideoForm>;
 
 /** The draft was kept. `savedAt` is a time of day on the teacher's clock. */
 export interface CuesKept {

@@ -55,7 +55,7 @@ test('a part waits for another one to be done; a later one is refused with the r
   await expect(inMain(page).getByText(/opens when Part 1 is done/)).toBeVisible();
   await page.getByRole('button', { name: 'Move Part 2, Fringe up' }).press('Enter');
   await page.getByRole('link', { name: 'Before you publish', exact: true }).last().click();
-  await expect(inMain(page).getByText('It waits for Part 2, which comes later, so nobody could ever open it.')).toBeVisible();
+  await expect(inMain(page).getByText('It waits for Part 2, which comes later, so nobody could ever open it.').first()).toBeVisible();
   await page.setViewportSize({ width: 390, height: 844 });
   await expectFaultless(page);
   await inMain(page).getByRole('link', { name: /^Open the settings of Part 1/ }).press('Enter');

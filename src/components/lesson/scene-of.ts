@@ -1,4 +1,5 @@
 // Puts a scene together from what a page has fetched: a piece with its plan, the media of the series, the ticks.
+import { sizeWords } from '#core/video/limits.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
 import { amountOf } from '#core/craft/amounts.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
@@ -77,12 +78,14 @@ function pictureOf(media: SeriesMediaFile | undefined): ScenePicture | undefined
 function videoOf(media: SeriesMediaFile | undefined, place: SceneVideo['place']): SceneVideo | undefined {
   const video = media?.files['video'];
   if (media === undefined || video === undefined) return undefined;
+  const small = media.files['small'];
   const { poster = 'poster', cues = [], chapters = [] } = media.detail;
   return {
     title: media.title,
     src: addressOf(media, 'video'),
     type: video.contentType,
     durationMs: media.durationMs ?? 0,
+    ...(small === undefined ? {} : { small: { src: addressOf(media, 'small'), says: `${sizeWords(small.byteCount)} instead of ${sizeWords(video.byteCount)}` } }),
     ...(media.files[poster] === undefined ? {} : { poster: addressOf(media, poster) }),
     ...(cues.length === 0 ? {} : { captions: addressOf(media, media.isDraft ? 'captions-draft' : 'captions') }),
     chapters,

@@ -32,6 +32,8 @@ export interface ScenePicture {
 export interface SceneVideo {
   readonly title: string;
   readonly src: string;
+  /** The same film for slow lines, and how much smaller it is. */
+  readonly small?: { readonly src: string; readonly says: string };
   /** Content type of the file, such as `video/mp4`. */
   readonly type: string;
   readonly durationMs: number;

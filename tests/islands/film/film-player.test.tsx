@@ -13,7 +13,8 @@ const pause = vi.fn(function pause(this: HTMLMediaElement) { this.dispatchEvent(
 
 beforeEach(() => {
   vi.clearAllMocks();
-  Object.assign(HTMLMediaElement.prototype, { play, pause });
+  Object.assign(HTMLMediaElement.prototype, { play, pause, load: vi.fn() });
+  localStorage.clear();
 });
 afterEach(cleanup);
 
@@ -45,6 +46,32 @@ describe('a film', () => {
     await userEvent.click(screen.getByRole('link', { name: /Knot/ }));
     expect(film().currentTime).toBe(60);
     expect(screen.getByRole('link', { name: /Knot/ }).getAttribute('aria-current')).toBe('true');
+  });
+
+  test('is played small where she chooses so, at the same place, and stays small for the next', async () => {
+    const small = { src: '/media/v/small', says: '12 MB instead of 48 MB' };
+    const source = (): string | null | undefined => film().querySelector('source')?.getAttribute('src');
+    render(player({ small }));
+    expect(source()).toBe('/media/v/video');
+    film().currentTime = 42;
+    await userEvent.click(screen.getByRole('button', { name: 'Small film for slow lines, 12 MB instead of 48 MB' }));
+    expect(source()).toBe('/media/v/small');
+    film().currentTime = 0;
+    fireEvent.loadedMetadata(film());
+    expect(film().currentTime).toBe(42);
+    cleanup();
+    render(player({ small }));
+    expect(source()).toBe('/media/v/small');
+    expect(screen.getByRole('button', { name: /^Small film/, pressed: true })).toBeDefined();
+    cleanup();
+    render(player());
+    expect(source()).toBe('/media/v/video');
+  });
+
+  test('without script offers the small film as a link', () => {
+    const page = document.createElement('div');
+    page.innerHTML = renderToString(player({ small: { src: '/media/v/small', says: '12 MB instead of 48 MB' } }));
+    expect(page.querySelector('a[href="/media/v/small"]')?.textContent).toBe('Small film for slow lines');
   });
 
   test('is worked by keys within it', () => {

@@ -58,6 +58,18 @@ describe('an uploaded video', () => {
     expect(await VideoUpload.count()).toBe(0);
   });
 
+  test('of more than 480 lines has a small one beside it for slow lines, made in the same run', async () => {
+    const media = await arrived(makeClip(folder, 'large.mp4', { size: '1280x720' }));
+    await makeVideoReady(ctx, media.publicId, still);
+    await media.reload();
+    expect(media).toMatchObject({ state: 'ready', width: 1280, height: 720 });
+    const small = await probeVideo(join(folder, 'uploads', 'videos', media.publicId), 'small.mp4');
+    expect(small?.streams.map(({ codec, width, height }) => [codec, width, height])).toEqual([['h264', 852, 480], ['aac', 0, 0]]);
+    expect(small?.seconds).toBeCloseTo((media.durationMs ?? 0) / 1_000, 1);
+    expect(media.files['small']?.byteCount).toBeLessThan(media.files['video']?.byteCount ?? 0);
+    expect(media.byteCount).toBe(Object.values(media.files).reduce((sum, { byteCount }) => sum + byteCount, 0));
+  });
+
   test.each([
     ['in WebM without sound', 'clip.webm', { codec: ['-c:v', 'libvpx', '-deadline', 'realtime'], sound: false }, [320, 180]],
     ['larger than it is shown', 'clip.mp4', { size: '2560x1440', seconds: 0.5 }, [1920, 1080]],

@@ -6,6 +6,7 @@ import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { Lesson, Media, Series, SeriesMedia, Workroom } from '#server/models/index.ts';
 import { mayTeachIn } from '#server/policies/workroom.ts';
+import { videoUses, type VideoUse } from './video-uses.ts';
 
 /** A video that is not ready, or will not be. How much of it has come is told by its file. */
 export type ArrivingVideo = Omit<VideoOnItsWay, 'arrivedBytes'>;
@@ -32,6 +33,8 @@ export interface VideoDesk extends VideoOnDesk {
   readonly series: { readonly slug: string; readonly title: string; readonly workroomName: string; readonly timeZone: string };
   /** The part it was put in for; null when that is gone. */
   readonly part: { readonly publicId: string; readonly title: string; readonly number: number } | null;
+  /** Parts that speak of it. */
+  readonly uses: readonly VideoUse[];
 }
 
 /** @returns null when there is no such video in a series of the asker. */
@@ -40,14 +43,16 @@ export async function videoDesk(actor: Actor, slug: string, name: string): Promi
   if (series === null || !mayTeachIn(actor, series.workroomId)) return null;
   const named = await SeriesMedia.findOne({ where: { seriesId: series.id, name } });
   if (named === null) return null;
-  const [workroom, lesson, [video]] = await Promise.all([
+  const [workroom, lesson, [video], uses] = await Promise.all([
     Workroom.findByPk(series.workroomId, { rejectOnEmpty: true }),
     partOf(named),
     onDesk([named]),
+    videoUses(series.id, name),
   ]);
   if (video === undefined) return null;
   return {
     ...video,
+    uses,
     series: { slug, title: series.title, workroomName: workroom.name, timeZone: workroom.timeZone },
     part: lesson === null ? null : { publicId: lesson.publicId, title: lesson.title, number: lesson.position },
   };

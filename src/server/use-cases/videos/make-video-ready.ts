@@ -8,7 +8,7 @@ import { withTransaction } from '#server/db/transaction.ts';
 import { AppError } from '#server/errors.ts';
 import { VIDEO_UPLOADS_FOLDER, VIDEO_WORK_FOLDER } from '#server/media/video/folders.ts';
 import { probeVideo } from '#server/media/video/probe.ts';
-import { takeStills, transcode, TRANSCODED } from '#server/media/video/transcode.ts';
+import { SMALL, SMALL_LINES, takeStills, transcode, TRANSCODED } from '#server/media/video/transcode.ts';
 import { Media, SeriesMedia, VideoUpload } from '#server/models/index.ts';
 import { failVideo } from './_fail-video.ts';
 
@@ -80,7 +80,9 @@ async function make(ctx: Context, media: Media, folder: string, signal: AbortSig
   signal.throwIfAborted();
   const size = { width: picture.width, height: picture.height };
   const files: Record<string, MediaFile> = {};
-  for (const [name, contentType, given] of [[TRANSCODED, 'video/mp4', size], ...stills.map((still) => [still, 'image/jpeg', {}] as const)] as const) {
+  // A film that is small already has no smaller one beside it.
+  const small = Math.min(picture.width, picture.height) > SMALL_LINES ? [[SMALL, 'video/mp4', {}] as const] : [];
+  for (const [name, contentType, given] of [[TRANSCODED, 'video/mp4', size], ...small, ...stills.map((still) => [still, 'image/jpeg', {}] as const)] as const) {
     const key = `videos/${media.publicId}/${name}`;
     const { size: byteCount } = await stat(join(folder, name));
     await ctx.services.media.put(key, join(folder, name));
