@@ -5,6 +5,7 @@ import { listReports } from '#server/queries/office/list-reports.ts';
 import { countWaitingQuestions, questionInbox } from '#server/queries/questions/question-inbox.ts';
 import { answerQuestion } from '#server/use-cases/questions/answer-question.ts';
 import { changeWords } from '#server/use-cases/questions/change-words.ts';
+import { forgetTakenOutWords } from '#server/use-cases/questions/forget-taken-out-words.ts';
 import { putBackWords } from '#server/use-cases/questions/put-back-words.ts';
 import { reportWords } from '#server/use-cases/questions/report-words.ts';
 import { settleReport } from '#server/use-cases/questions/settle-report.ts';
@@ -130,6 +131,22 @@ describe('own words', () => {
     await take(all.teacher, 'question', question.publicId);
     await expect(put(all.maud, 'question', question.publicId)).rejects.toMatchObject({ code: 'NOT_FOUND' });
     expect((await AuditEntry.findAll()).map(({ action }) => action)).toEqual(['take-out-question']);
+  });
+});
+
+describe('words taken out', () => {
+  test('are forgotten after thirty days, unless the steward has still to judge them', async () => {
+    const all = await buildClass();
+    const [gone, judged, young, standing] = [await ask(all, all.maud, { words: 'One?', to: 'class' }), await ask(all, all.maud, { words: 'Two?', to: 'class' }), await ask(all, all.maud, { words: 'Three?' }), await ask(all, all.maud, { words: 'Four?' })];
+    await reportWords(await contextFor(all.jonas), { of: 'question', which: judged.publicId, why: 'Unkind' });
+    for (const question of [gone, standing]) await answer(all.teacher, question);
+    for (const question of [gone, judged, young]) await takeOutWords(await contextFor(all.maud), { of: 'question', which: question.publicId });
+    const later = await contextFor(all.maud);
+    await young.update({ takenOutAt: new Date('2026-12-03T00:00:00Z') });
+    later.clock.set(new Date('2026-12-31T10:00:01Z'));
+    await forgetTakenOutWords(later);
+    expect((await Question.findAll({ order: ['id'] })).map(({ words }) => words)).toEqual(['Two?', 'Three?', 'Four?']);
+    expect(await QuestionAnswer.count()).toBe(1);
   });
 });
 
