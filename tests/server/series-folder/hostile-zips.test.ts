@@ -1,6 +1,7 @@
 // Zips from outside that mean harm, or are merely broken: refused with a sentence, and nothing of them is left.
 import { readdirSync, writeFileSync } from 'node:fs';
 import { join, resolve } from 'node:path';
+import sharp from 'sharp';
 import { beforeEach, describe, expect, test } from 'vitest';
 import type { WrittenSeriesFile } from '#contracts/series-folder.ts';
 import { config } from '#server/config.ts';
@@ -111,6 +112,15 @@ describe('a file in the zip', () => {
     isRefused(makeZip([{ name: 'series.yaml', bytes: Buffer.from(sign.repeat(100_000)) }, LESSON]), 'series.yaml', /nests deeper/));
   test('with a list of endless lines is refused', () => isRefused(makeZip([{ name: 'series.yaml', bytes: Buffer.from('- a\n'.repeat(100_000)) }, LESSON]), 'series.yaml', /\w/));
   test('with a word in the list that it does not know is refused', () => isRefused(makeZip([listing({ state: 'published' } as Partial<WrittenSeriesFile>), LESSON]), 'series.yaml', /state/));
+});
+
+test('pictures that would go over the teacher’s room are told, and nothing of the series is kept', async () => {
+  const actor = teacher.actor;
+  await Media.create({ ownerId: actor?.userId ?? 0, kind: 'picture', state: 'ready', originalName: 'old.webp', byteCount: 1_999_999_990, files: {}, detail: {} });
+  const bytes = await sharp({ create: { width: 40, height: 40, channels: 3, background: '#446e9f' } }).png().toBuffer();
+  const before = filesLeft();
+  await expect(bringIn(makeZip([listing({ pictures: [{ name: 'field', title: '', file: 'pictures/01-field.png' }] }), LESSON, { name: 'pictures/01-field.png', bytes }]))).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('may be 2 GB') });
+  expect([await Series.count(), await Media.count(), filesLeft()]).toEqual([0, 1, before]);
 });
 
 test('nobody without a workroom brings anything in', async () => {
