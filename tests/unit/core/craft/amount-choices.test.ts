@@ -28,6 +28,16 @@ describe('the amounts a teacher chooses from', () => {
     expect([textOf('cm'), textOf('in')]).toEqual(['30 cm', '11 13/16 in']);
   });
 
+  test('are called what they are, a yarn with its role', () => {
+    const labels = groupsOf().map(({ choices }) => choices.map(({ label }) => label));
+    expect(labels.slice(0, 4)).toEqual([
+      ['Nails on the upper rail', 'Width', 'Height', 'Width of the warp', 'Inside width of the loom, at least', 'From nail to nail upright, at least'],
+      ['Warp ends', 'From end to end', 'Warp yarn', 'Warp yarn'], ['ground (ground)', 'ground (ground)'], ['Sky: height', 'Sky: rows', 'Sky: ground'],
+    ]);
+    const bare = pieceWith({ bands: [{ technique: 'tabby', yarn: 'ground', fill: true }] });
+    expect(amountChoices(bare, planOf(bare), 'cm').map(({ title }) => title)).toEqual(['Size and loom', 'Warp', 'Yarns', 'Tools and time']);
+  });
+
   test('tell two yarns of one name apart by their roles', () => {
     const yarn = { metresPer100g: 180, label: 'Fenwool 6/2' };
     const piece = pieceWith({ yarns: { ground: yarn, figure: yarn } });

@@ -173,6 +173,18 @@ test('the demo series fits its own loom, and a narrower one with every second na
   expect(fitPiece(piece, { widthMm: 300, loom: { nailPitchMm: 5, insideWidthMm: 400 } })).toMatchObject({ ok: true, value: { piece: { loom: { everyNthNail: 2 } } } });
 });
 
+test('a pattern of no known craft is refused, with what is wrong with hers', () => {
+  const unknown = { ...PATTERN, craft: 'lace' } as unknown as FrameLoomPiece;
+  const refusals = (mine: unknown): string[] => {
+    const outcome = fitPiece(unknown, mine as MyPiece);
+    return outcome.ok ? ['fits'] : outcome.problems.map(({ code, path }) => `${code} ${path}`);
+  };
+  expect(refusals({})).toEqual(['E_ENUM /craft']);
+  expect(refusals({ loom: 7, more: true })).toEqual(['E_ENUM /craft', 'E_ENUM /loom', 'E_ENUM /more']);
+  const known = fitPiece(PATTERN, { loom: 7, yarns: { ground: 'wool' }, cords: { main: 4 }, rod: 2 } as unknown as MyPiece);
+  expect(known.ok ? [] : known.problems.map(({ path }) => path)).toEqual(['/loom', '/yarns/ground', '/cords/main', '/rod']);
+});
+
 describe('what her plan warns of', () => {
   const yarns = { ground: { metresPer100g: 180 }, red: { metresPer100g: 180 }, blue: { metresPer100g: 180 } };
   const pattern = pieceWith({ yarns, bands: [...PLAIN_PIECE.bands, { technique: 'twining', name: 'line', yarn: 'red', rows: 2 }] });

@@ -114,6 +114,8 @@ describe('the spacings a loom offers', () => {
     const [every, second] = offeredSpacings(frame, warp, threadOf({ metresPer100g: 300 }, 0.84));
     expect(every).toMatchObject({ advice: 'suits', strands: 2 });
     expect(second).toMatchObject({ advice: 'too-thin', strands: 17 });
+    // However many she takes together now.
+    expect(offeredSpacings(frame, warp, threadOf({ metresPer100g: 300, strands: 4 }, 0.84))[0]).toMatchObject({ strands: 2 });
     expect(offeredSpacings({ nailPitchMm: 4, warping: 'zigzag' }, threadOf({ tex: 1200 }, 0.9), warp)[0]).not.toHaveProperty('strands');
   });
 
