@@ -1,11 +1,12 @@
 /** Rya knots of the page's yarn on its ends: cut length, winding card, strands and yarn. */
 import { countOf, lengthOf, massOf } from '#core/craft/amounts/amount-types.ts';
-import { ASHENHURST_K, DEFAULT_ALLOWANCES } from '#core/craft/defaults.ts';
+import { ASHENHURST_K } from '#core/craft/defaults.ts';
 import type { DressedWarp } from '#core/craft/frame-loom/dress-loom.ts';
 import type { RyaBand, Yarn } from '#core/craft/piece.ts';
 import { ballsFor, withMargin } from '#core/craft/purchase.ts';
 import { reckon } from '#core/craft/reckon.ts';
 import type { RyaAnswer } from '#core/craft/reckoning/reckon-stitches.ts';
+import { ceilSafe } from '#core/craft/rounding.ts';
 import { explainRya } from '#core/craft/show-how/explain.ts';
 import { massOf as massOfYarn, threadOf } from '#core/craft/yarn/thread.ts';
 import { loud, NO_ANSWER, named, written, type AnswerLine, type Section } from '#core/reckoner/answer-line.ts';
@@ -46,14 +47,14 @@ export function ryaBand({ legEnds, strands, pileMm, trimMm, rows }: TypedRya): R
   return { technique: 'rya', name: 'fringe', yarn: 'ground', strands, legEnds, pileMm, trimMm, rows, heightMm: ROW_MM * rows };
 }
 
-/** Nobody has a swatch of a fringe: the reserve is that of a yarn without one. */
-const MARGIN = DEFAULT_ALLOWANCES.marginWeft.unmeasured;
+/** Strands are counted and cut to one length, so little can go astray: common practice, no source. */
+const RESERVE = 0.05;
 
 function yarnLines(rya: RyaAnswer, yarn: Yarn, tex: number): AnswerLine[] {
-  const inHandMm = withMargin(rya.yarnMm, MARGIN);
+  const inHandMm = ceilSafe(withMargin(rya.strands, RESERVE)) * rya.cutMm;
   const balls = yarn.ball === undefined ? [] : [loud({ label: 'Balls', value: countOf(ballsFor(inHandMm, yarn.ball.metres).count, 'ball', 'balls'), how: 'length with reserve ÷ length of a ball, rounded up', trust: 'label' })];
   return [
-    loud({ label: 'Yarn to have in hand', value: lengthOf(inHandMm, 'yarn'), how: 'strands × cut length, and the reserve of a yarn without a swatch', trust: 'formula' }),
+    loud({ label: 'Yarn to have in hand', value: lengthOf(inHandMm, 'yarn'), how: 'strands and 5 % more, whole ones, × cut length', trust: 'formula' }),
     loud({ label: 'By weight', value: massOf(massOfYarn(inHandMm, tex)), how: 'length × tex', trust: 'label' }),
     ...balls,
   ];

@@ -182,6 +182,8 @@ describe('rya', () => {
     expect(told(answer, 'rya', 'Cut each strand')).toBe('36.5 cm');
     expect(told(answer, 'rya', 'Winding card')).toBe('18.5 cm');
     expect(told(answer, 'rya', 'Strands')).toBe('93 strands');
+    // 93 strands and 5 % are 97.65, so 98 of 36.43 cm.
+    expect(answer.rya.lines.find(({ label }) => label === 'Yarn to have in hand')?.value).toMatchObject({ mm: expect.closeTo(98 * 364.3, -2) as number });
     expect(told(answerTo({ 'edge-ends': '2' }), 'rya', 'Knots in a row')).toBe('29 knots');
   });
 });
