@@ -1,10 +1,16 @@
 /** Forms about notices: reading them, and in the workroom writing them. */
-import { MarkReadForm } from '#contracts/notices.ts';
+import { LettersForm, MarkReadForm } from '#contracts/notices.ts';
+import { chooseLetters } from '#server/use-cases/letters/choose-letters.ts';
 import { markRead } from '#server/use-cases/notices/mark-read.ts';
 import { safeReturn } from '#server/web/gate.ts';
 import { formAction } from './form-action.ts';
 
 export const notices = {
+  chooseLetters: formAction(LettersForm, async (input, ctx, api) => {
+    const workroom = await chooseLetters(ctx, input);
+    return { to: safeReturn(`${api.url.pathname}#letters`, '/account#letters'), said: input.wanted.length === 0 ? `No letters of ${workroom} but those about your own doings.` : `Kept: these letters of ${workroom} come to you.` };
+  }),
+
   /** She stays where she is. */
   markRead: formAction(MarkReadForm, async (input, ctx, api) => {
     const count = await markRead(ctx, input);

@@ -10,6 +10,7 @@ import { resendConfirmation } from '#server/use-cases/people/resend-confirmation
 import { setNewPassword } from '#server/use-cases/people/set-new-password.ts';
 import { signIn } from '#server/use-cases/people/sign-in.ts';
 import { signUp } from '#server/use-cases/people/sign-up.ts';
+import { tryAddressAgain } from '#server/use-cases/people/try-address-again.ts';
 import { updateAccount } from '#server/use-cases/people/update-account.ts';
 import { safeReturn } from '#server/web/gate.ts';
 import { formAction } from './form-action.ts';
@@ -42,6 +43,11 @@ export const people = {
     const address = await resendConfirmation(ctx);
     const said = address === null ? 'Your address is confirmed already.' : `A letter is on its way to ${address}. Its link works for 24 hours, once.`;
     return { to: safeReturn(api.url.pathname, '/account'), said };
+  }),
+
+  tryAddressAgain: formAction(NothingForm, async (_input, ctx) => {
+    const was = await tryAddressAgain(ctx);
+    return { to: '/account#address', said: was ? 'Letters are sent there again. If one comes back, it is said here.' : 'Letters go there already.' };
   }),
 
   askNewPassword: formAction(ForgottenForm, async (input, ctx) => {

@@ -10,6 +10,8 @@ export interface SitePerson {
   units?: 'cm' | 'in';
   /** False until she has opened the link in our first letter. */
   addressConfirmed?: boolean;
+  /** True while her mail server takes no letters. */
+  addressRefused?: boolean;
   /** Notices she has not marked as read. */
   unread?: number;
   /** Name of the workroom she works in, shown beside the mark inside the workroom. */

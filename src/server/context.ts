@@ -8,6 +8,8 @@ export interface Actor {
   readonly name: string;
   readonly email: string;
   readonly addressConfirmed: boolean;
+  /** Its mail server said that it takes no letters. */
+  readonly addressRefused: boolean;
   readonly isSteward: boolean;
   /** The workroom this person teaches in, or null. */
   readonly workroomId: number | null;

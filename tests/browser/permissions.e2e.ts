@@ -49,6 +49,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/forgotten': [{ at: '/forgotten', answers: EVERYBODY }],
   '/handbook': [{ at: '/handbook', answers: EVERYBODY }],
   '/handbook/[...slug]': [{ at: '/handbook/tabby', answers: EVERYBODY }, { at: '/handbook/nothing', answers: '404' }],
+  '/leave/[key]': [{ at: `/leave/${'0'.repeat(26)}-${'0'.repeat(26)}-notices-${'A'.repeat(43)}`, answers: '404' }, { at: '/leave/nothing', answers: '404' }],
   '/loom': [{ at: '/loom', answers: SIGNED_IN }],
   '/media/[id]/[file]': [
     { at: ({ photo }) => `/media/${photo}/large`, answers: '404 404 200 404 200 200 404' },

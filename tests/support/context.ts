@@ -28,6 +28,7 @@ export async function actorOf(user: User): Promise<Actor> {
     name: user.name,
     email: user.email,
     addressConfirmed: user.emailConfirmedAt !== null,
+    addressRefused: false,
     isSteward: user.isSteward,
     workroomId: workroom?.id ?? null,
     workroomName: workroom?.name ?? null,

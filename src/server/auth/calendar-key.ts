@@ -2,8 +2,7 @@
  * The private address of a student's calendar: whoever knows it reads when parts of one seat open, and nothing else.
  * Signed, so that none has to be kept; a new revision makes a new one and ends the old.
  */
-import { createHmac, timingSafeEqual } from 'node:crypto';
-import { config } from '#server/config.ts';
+import { isSame, seal } from '#server/auth/seal.ts';
 
 export interface CalendarOf {
   /** Public id of the seat. */
@@ -11,13 +10,8 @@ export interface CalendarOf {
   readonly revision: number;
 }
 
-function seal({ seat, revision }: CalendarOf): string {
-  const key = createHmac('sha256', config().secret).update('calendar').digest();
-  return createHmac('sha256', key).update(`${seat} ${revision}`).digest('base64url');
-}
-
-export function calendarKey(of: CalendarOf): string {
-  return `${of.seat}-${seal(of)}`;
+export function calendarKey({ seat, revision }: CalendarOf): string {
+  return `${seat}-${seal('calendar', `${seat} ${revision}`)}`;
 }
 
 /** The seat a key speaks of; null for what is no key. Whether it is the newest one is for `opensCalendar` to say. */
@@ -26,6 +20,5 @@ export function seatOfKey(key: string): string | null {
 }
 
 export function opensCalendar(key: string, of: CalendarOf): boolean {
-  const [given, right] = [Buffer.from(key), Buffer.from(calendarKey(of))];
-  return given.length === right.length && timingSafeEqual(given, right);
+  return isSame(key, calendarKey(of));
 }

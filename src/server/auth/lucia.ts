@@ -20,6 +20,7 @@ export interface UserAttributes {
   readonly name: string;
   readonly email: string;
   readonly addressConfirmed: boolean;
+  readonly addressRefused: boolean;
   readonly isSteward: boolean;
   readonly workroomId: number | null;
   readonly workroomName: string | null;
@@ -42,7 +43,7 @@ declare module 'lucia' {
 interface SessionAndUserRow {
   id: string; userId: number; expiresAt: Date; endsAt: Date; idleSeconds: number; provedAt: Date; device: string;
   publicId: string; name: string; email: string; confirmedAt: Date | null; isSteward: number; units: 'cm' | 'in'; timeZone: string;
-  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; workroomName: string | null; helps: string | null; unreadNotices: number;
+  scheme: 'system' | 'light' | 'dark'; workroomId: number | null; workroomName: string | null; helps: string | null; unreadNotices: number; addressRefused: number;
 }
 
 /** One statement a request: session, person and the roles that follow from other rows. A suspended person has no session. */
@@ -52,7 +53,8 @@ const SESSION_AND_USER = `
          w.id AS workroomId,
          COALESCE(w.name, (SELECT MIN(o.name) FROM workroom_helpers h JOIN workrooms o ON o.id = h.workroom_id WHERE h.user_id = u.id HAVING COUNT(*) = 1)) AS workroomName,
          (SELECT GROUP_CONCAT(h.workroom_id) FROM workroom_helpers h WHERE h.user_id = u.id) AS helps,
-         (SELECT COUNT(*) FROM notice_receipts r WHERE r.user_id = u.id AND r.read_at IS NULL) AS unreadNotices
+         (SELECT COUNT(*) FROM notice_receipts r WHERE r.user_id = u.id AND r.read_at IS NULL) AS unreadNotices,
+         EXISTS (SELECT 1 FROM refused_addresses f WHERE f.address_key = u.email_key) AS addressRefused
     FROM sessions s
     JOIN users u ON u.id = s.user_id AND u.suspended_at IS NULL
     LEFT JOIN workrooms w ON w.owner_id = u.id
@@ -71,6 +73,7 @@ function userOf(row: SessionAndUserRow): DatabaseUser {
       name: row.name,
       email: row.email,
       addressConfirmed: row.confirmedAt !== null,
+      addressRefused: row.addressRefused === 1,
       isSteward: row.isSteward === 1,
       workroomId: row.workroomId,
       workroomName: row.workroomName,

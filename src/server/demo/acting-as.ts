@@ -19,6 +19,7 @@ export async function actingAs(user: User): Promise<Context & { actor: Actor }> 
       name: user.name,
       email: user.email,
       addressConfirmed: true,
+      addressRefused: false,
       isSteward: user.isSteward,
       workroomId: workroom?.id ?? null,
       workroomName: workroom?.name ?? null,

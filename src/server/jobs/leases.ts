@@ -67,6 +67,11 @@ export function finishDead(table: QueueTable, owner: string, id: number, error: 
   return finish(table, owner, id, "state = 'dead', last_error = ?", [error.slice(0, 500)]);
 }
 
+/** A letter that is not to be sent after all. */
+export function finishDropped(owner: string, id: number, why: string): Promise<boolean> {
+  return finish('mails', owner, id, "state = 'dropped', last_error = ?", [why.slice(0, 500)]);
+}
+
 /** Gives back what a stopping worker has claimed but not begun. */
 export async function releaseAll(table: QueueTable, owner: string): Promise<void> {
   await sequelize.query(

@@ -10,8 +10,6 @@ export type Block =
 
 /** A list of letters that can be left. */
 export interface MailingList {
-  /** Shown beside the id: `Notices of Saltmarsh Loom Room`. */
-  readonly name: string;
   /** First labels of the list's id, before the house's own domain: `notices.saltmarsh`. */
   readonly label: string;
   /** A POST there leaves the list, with nothing else asked (RFC 8058). */

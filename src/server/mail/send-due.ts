@@ -1,8 +1,10 @@
 /** One round of the post: claims due letters, lays them out, hands them to the transport, writes down how each ended. */
 import { TEMPLATES } from '#server/mail/templates/index.ts';
 import { layOut } from '#server/mail/letter.ts';
+import { listHeaders } from '#server/mail/list-headers.ts';
 import type { MailTransport } from '#server/mail/transport.ts';
-import { claimDue, finishDead, finishDone, finishLater } from '#server/jobs/leases.ts';
+import { noteArrival, noteRefusal, whyNotSent } from '#server/mail/addressee.ts';
+import { claimDue, finishDead, finishDone, finishDropped, finishLater } from '#server/jobs/leases.ts';
 import { Mail } from '#server/models/index.ts';
 
 export interface PostOffice {
@@ -33,8 +35,17 @@ async function sendOne(office: PostOffice, owner: string, id: number, attempts: 
     await finishDead('mails', owner, id, 'too late to be of use');
     return;
   }
+  const why = await whyNotSent(mail);
+  if (why !== null) {
+    await finishDropped(owner, id, why);
+    return;
+  }
   const result = await attempt(office, mail);
-  if (result.ok) await finishDone('mails', owner, id);
+  if (!result.ok && result.reason === 'address-refused') await noteRefusal(mail.toAddress, result.message);
+  if (result.ok) {
+    await finishDone('mails', owner, id);
+    await noteArrival(mail);
+  }
   else if (result.reason === 'later' && attempts <= WAITS.length) await finishLater('mails', owner, id, wait(attempts, office.chance()), result.message);
   else await finishDead('mails', owner, id, result.message);
 }
@@ -48,14 +59,15 @@ async function attempt(office: PostOffice, mail: Mail): ReturnType<MailTransport
   try {
     const template = Object.entries(TEMPLATES).find(([name]) => name === mail.template)?.[1];
     if (template === undefined) throw new Error(`no template ${mail.template}`);
-    const laidOut = layOut(template.compose(mail.data, office), mail.toName, office.publicUrl);
+    const letter = template.compose(mail.data, office);
+    const domain = office.from.split('@')[1] ?? 'fellmark.example';
     return await office.transport.sendMail({
       to: { name: mail.toName, address: mail.toAddress },
       from: { name: 'Fellmark', address: office.from },
-      ...laidOut,
-      headers: { 'Content-Language': 'en' },
+      ...layOut(letter, mail.toName, office.publicUrl),
+      headers: { 'Content-Language': 'en', ...(letter.list && listHeaders(letter.list, domain)) },
       // The same for every try, so that a copy sent after a lost answer is recognised as one.
-      messageId: `<mail-${mail.id}-${mail.createdAt.getTime()}@${office.from.split('@')[1] ?? 'fellmark.example'}>`,
+      messageId: `<mail-${mail.id}-${mail.createdAt.getTime()}@${domain}>`,
     });
   } catch (error) {
     return { ok: false, reason: 'mail-refused', replyCode: undefined, message: error instanceof Error ? error.message : String(error) };

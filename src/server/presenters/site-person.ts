@@ -14,6 +14,7 @@ export function presentSitePerson(actor: Actor): SitePerson {
     scheme: actor.scheme === 'system' ? null : actor.scheme,
     units: actor.units,
     addressConfirmed: actor.addressConfirmed,
+    addressRefused: actor.addressRefused,
     unread: actor.unreadNotices,
     workroom: actor.workroomName,
   };

@@ -50,6 +50,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/series/[slug]/piece': 'signed-in',
   '/loom': 'signed-in',
   '/notices': 'signed-in',
+  '/leave/[key]': 'machine',
   '/reckoner': 'public',
   '/sign-in': 'public',
   '/sign-up': 'public',

@@ -31,7 +31,7 @@ describe('the store that Lucia keeps sessions in', () => {
     expect(found).toEqual(kept);
     expect(person).toEqual({
       id: user.id,
-      attributes: { publicId: user.publicId, name: 'Maud Ellery', email: user.email, addressConfirmed: true, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [], units: 'cm', timeZone: 'UTC', scheme: 'system', unreadNotices: 0 },
+      attributes: { publicId: user.publicId, name: 'Maud Ellery', email: user.email, addressConfirmed: true, addressRefused: false, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [], units: 'cm', timeZone: 'UTC', scheme: 'system', unreadNotices: 0 },
     });
   });
 

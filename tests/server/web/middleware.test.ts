@@ -136,6 +136,12 @@ describe('something that changes things', () => {
     expect((await ask({ route: '/api/payments/events', method: 'POST', headers: bare })).response.status).toBe(200);
   });
 
+  test.each(['same-origin', 'none', 'same-site', 'cross-site'])('at the link of a letter is let in from %s, as a mail program posts there from nowhere', async (site) => {
+    const maud = await cookiesOf(await buildUser());
+    const { response, context } = await ask({ route: '/leave/[key]', path: '/leave/x', method: 'POST', headers: { 'sec-fetch-site': site, origin: 'null' }, cookies: maud });
+    expect([response.status, context.locals.ctx.actor]).toEqual([200, null]);
+  });
+
   test('at an address of the API is refused as a problem document', async () => {
     const { response, text } = await ask({ route: '/api/ticks', method: 'POST' });
     expect([response.status, response.headers.get('content-type')]).toEqual([401, 'application/problem+json; charset=utf-8']);

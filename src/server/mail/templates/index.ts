@@ -3,6 +3,7 @@ import type { z } from 'astro/zod';
 import { verdict } from './bench.ts';
 import { seatBought, seatRefused } from './checkout.ts';
 import { helpEnded, helperInvited } from './helpers.ts';
+import { notice } from './notices.ts';
 import { workroomOpened } from './office.ts';
 import { partsOpened } from './openings.ts';
 import { questionAnswered } from './questions.ts';
@@ -14,6 +15,7 @@ export const TEMPLATES = {
   'help-ended': helpEnded,
   'helper-invited': helperInvited,
   'new-password': newPassword,
+  notice,
   'parts-opened': partsOpened,
   'password-changed': passwordChanged,
   'question-answered': questionAnswered,

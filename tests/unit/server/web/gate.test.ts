@@ -5,7 +5,7 @@ import { gate, safeReturn, type GateAnswer } from '#server/web/gate.ts';
 import type { RouteRule } from '#server/web/route-rules.ts';
 
 const student: Actor = {
-  userId: 1, publicId: 'p', name: 'Maud', email: 'maud@weavers.example', addressConfirmed: true, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [],
+  userId: 1, publicId: 'p', name: 'Maud', email: 'maud@weavers.example', addressConfirmed: true, addressRefused: false, isSteward: false, workroomId: null, workroomName: null, helpsInWorkroomIds: [],
   units: 'cm', timeZone: 'UTC', scheme: 'system', unreadNotices: 0, sessionId: 's', provedAt: new Date(0),
 };
 const PEOPLE = {
