@@ -63,6 +63,10 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom/series/[slug]/videos/[name]': [['ilse', '/workroom/series/low-tide/videos/dress-the-loom']],
   '/workroom/things': [['ilse', '/workroom/things']],
   '/workroom/series/[slug]/lists': [['ilse', '/workroom/series/low-tide/lists']],
+  '/workroom/notices': [['ilse', '/workroom/notices'], ['teodor', '/workroom/notices']],
+  '/workroom/notices/new': [['ilse', '/workroom/notices/new'], ['teodor', '/workroom/notices/new']],
+  '/workroom/notices/[notice]': [['ilse', ({ notice }) => `/workroom/notices/${notice}`]],
+  '/workroom/students/[seat]': [['ilse', ({ seat }) => `/workroom/students/${seat}`]],
   '/workroom/students': [['ilse', '/workroom/students']],
   '/workroom/helpers': [['ilse', '/workroom/helpers'], ['wren', '/workroom/helpers']],
   '/workroom/questions': [['ilse', '/workroom/questions'], ['wren', '/workroom/questions'], ['teodor', '/workroom/questions']],
@@ -71,7 +75,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
-const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/helping/[token]', '/leave/[key]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
+const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/confirm/[token]', '/new-password/[token]', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
 
 test('every page of the program is looked at', () => {
   const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));

@@ -126,6 +126,12 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/series/[slug]/videos/[name]': [{ at: '/workroom/series/low-tide/videos/dress-the-loom', answers: OWNER }, { at: '/workroom/series/low-tide/videos/nothing', answers: '303 403 403 404 404 403 403' }],
   '/workroom/things': [{ at: '/workroom/things', answers: TEACHERS }],
   '/workroom/series/[slug]/lists': [{ at: '/workroom/series/low-tide/lists', answers: OWNER }],
+  '/workroom/notices': [{ at: '/workroom/notices', answers: TEACHERS }],
+  '/workroom/notices/new': [{ at: '/workroom/notices/new', answers: TEACHERS }],
+  '/workroom/notices/[notice]': [{ at: ({ notice }) => `/workroom/notices/${notice}`, answers: OWNER }],
+  // What is out is not written over any more: its teacher is led to it.
+  '/workroom/notices/[notice]/edit': [{ at: ({ notice }) => `/workroom/notices/${notice}/edit`, answers: OWNER.replace('200', '303') }],
+  '/workroom/students/[seat]': [{ at: ({ seat }) => `/workroom/students/${seat}`, answers: OWNER }],
   '/workroom/students': [{ at: '/workroom/students', answers: TEACHERS }],
 };
 

@@ -2,8 +2,8 @@
 import { emptyAllTables } from '#server/db/empty-tables.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
 import { makePeople, makeSteward, whoLivesHere } from '#server/demo/people.ts';
-import { bringMaudToPartTwo, giveSeat } from '#server/demo/progress.ts';
 import { askAndAnswer } from '#server/demo/questions.ts';
+import { askForLetters, bringMaudToPartTwo, giveSeat, writeToClass } from '#server/demo/progress.ts';
 import { bringIn } from '#server/demo/series.ts';
 import { drawVideos } from '#server/demo/videos.ts';
 import type { User } from '#server/models/index.ts';
@@ -39,6 +39,8 @@ export async function makeDemoWorld(password: string, say: (line: string) => voi
   await giveSeat(person('jonas@weavers.example'), lowTide, 2, now);
   await bringMaudToPartTwo(person('maud@weavers.example'), lowTide, maudsSeat);
   await askAndAnswer(lowTide, { maud: person('maud@weavers.example'), jonas: person('jonas@weavers.example'), wren: person('wren@saltmarsh.example') });
+  await askForLetters(person('maud@weavers.example'), saltmarsh);
+  await writeToClass(ilse, lowTide);
   await makeSteward(password, now);
   say('students');
   return true;

@@ -3,12 +3,16 @@ import { writeFile, rm } from 'node:fs/promises';
 import sharp from 'sharp';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
 import { clothOf } from '#core/craft/cloth-of.ts';
+import { LETTER_KINDS } from '#core/notices/letter-kinds.ts';
 import { fitPiece, type MyPiece } from '#core/craft/fit.ts';
 import { services } from '#server/services.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
 import { withOwnDrawings } from '#server/media/decoders.ts';
-import { Enrolment, GatheringItem, Lesson, LessonVisit, MyPieceRow, type Series, type User } from '#server/models/index.ts';
+import { Enrolment, GatheringItem, Lesson, LessonVisit, MyPieceRow, type Series, type User, type Workroom } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
+import { chooseLetters } from '#server/use-cases/letters/choose-letters.ts';
+import { keepNotice } from '#server/use-cases/notices/keep-notice.ts';
+import { sendNotice } from '#server/use-cases/notices/send-notice.ts';
 import { postPhoto } from '#server/use-cases/photos/post-photo.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
 
@@ -44,6 +48,21 @@ export async function bringMaudToPartTwo(maud: User, series: Series, seat: Enrol
   } finally {
     await rm(path, { force: true });
   }
+}
+
+/** Maud wants to hear from Ilse by letter too. */
+export async function askForLetters(maud: User, { publicId }: Workroom): Promise<void> {
+  await chooseLetters(await actingAs(maud), { workroom: publicId, source: 'seat', wanted: [...LETTER_KINDS] });
+}
+
+/** What Ilse wrote to her class on the day before. */
+export async function writeToClass(ilse: User, series: Series): Promise<void> {
+  const ctx = await actingAs(ilse);
+  const notice = await keepNotice(ctx, {
+    series: series.slug, part: null, still: null, postalAddress: '', title: 'The grey of the shore is back',
+    words: 'The mill has spun the grey of the dark shore again. For the whole piece you need <Amount of="yarn.shore"/> of it.\n\nIf you took another grey meanwhile: keep it. What hangs beside it decides, not the label.',
+  });
+  await sendNotice(ctx, { notice: notice.publicId, when: 'now', wall: '' });
 }
 
 /** A picture of her bare warp, drawn from her own piece and saved as a phone would. */

@@ -44,6 +44,10 @@ export const RATE_RULES = {
   video: { name: 'video', limit: 60, windowSeconds: 3_600 },
   /** Series taken along or brought in by one teacher. */
   seriesFolder: { name: 'series-folder', limit: 60, windowSeconds: 3_600 },
+  /** Notices to many, of one workroom. */
+  notice: { name: 'notice', limit: 10, windowSeconds: 86_400 },
+  /** Nudges of one workroom, to whomever. */
+  nudge: { name: 'nudge', limit: 60, windowSeconds: 86_400 },
   /** Drafts kept by themselves, of one teacher. */
   lessonDraft: { name: 'lesson-draft', limit: 120, windowSeconds: 60 },
   pieceDraft: { name: 'piece-draft', limit: 120, windowSeconds: 60 },

@@ -12,6 +12,9 @@ export interface DemoPlaces {
   readonly secondPart: string;
   /** Public id of a part of Low Tide, as its teacher's pages name it. */
   readonly workroomPart: string;
+  /** A notice of Ilse's, and the seat of a student of hers. */
+  readonly notice: string;
+  readonly seat: string;
   /** Public id of Maud, as the office names her. */
   readonly person: string;
 }
@@ -37,12 +40,14 @@ export function demoPlaces(): Promise<DemoPlaces> {
 }
 
 async function find(): Promise<DemoPlaces> {
-  const [bench, one, two, people, desk] = await Promise.all([
+  const [bench, one, two, people, desk, notices, students] = await Promise.all([
     pageAs('ilse', '/workroom/bench'),
     pageAs('ilse', '/series/low-tide/1'),
     pageAs('ilse', '/series/low-tide/2'),
     pageAs('pell', '/office/people?q=maud'),
     pageAs('ilse', '/workroom/series/low-tide'),
+    pageAs('ilse', '/workroom/notices'),
+    pageAs('ilse', '/workroom/students'),
   ]);
   return {
     photo: firstIn(bench, /\/media\/([0-9a-z]{26})\/large/, 'the photo'),
@@ -50,6 +55,8 @@ async function find(): Promise<DemoPlaces> {
     gatedVideo: firstIn(two, /\/media\/([0-9a-z]{26})\/video/, 'the film of Part 2'),
     secondPart: firstIn(await pageAs('maud', '/series/low-tide/2'), /name="lesson" value="([0-9a-z]{26})"/, 'the id of Part 2'),
     workroomPart: firstIn(desk, /\/workroom\/series\/low-tide\/parts\/([0-9a-z]{26})/, 'a part'),
+    notice: firstIn(notices, /\/workroom\/notices\/([0-9a-z]{26})/, 'a notice'),
+    seat: firstIn(students, /\/workroom\/students\/([0-9a-z]{26})/, 'a seat'),
     person: firstIn(people, /\/office\/people\/([0-9a-z]{26})/, 'Maud'),
   };
 }

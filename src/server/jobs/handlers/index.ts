@@ -3,6 +3,7 @@ import type { z } from 'astro/zod';
 import type { Context } from '#server/context.ts';
 import type { JobDefinition } from '#server/jobs/definition.ts';
 import { sendVerdict } from '#server/jobs/definitions/bench.ts';
+import { handOutNotice } from '#server/jobs/definitions/notices.ts';
 import { settleCheckout, settlePaymentEvent } from '#server/jobs/definitions/payments.ts';
 import { processVideo } from '#server/jobs/definitions/videos.ts';
 import { sendPasswordLink } from '#server/jobs/definitions/people.ts';
@@ -59,5 +60,6 @@ export const REGISTERED: readonly RegisteredJob[] = [
     async () => (await import('#server/use-cases/bench/send-verdict.ts')).sendVerdict,
     async () => (await import('#server/use-cases/bench/send-verdict.ts')).bringBackVerdict,
   ),
+  bind(handOutNotice, async () => (await import('#server/use-cases/notices/hand-out-notice.ts')).handOutNotice),
   bind(sendPasswordLink, async () => (await import('#server/use-cases/people/write-password-link.ts')).writePasswordLink),
 ];

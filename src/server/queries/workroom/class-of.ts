@@ -6,6 +6,7 @@ import { classPlace, type PartOfOne } from '#core/workroom/class-place.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 export interface ClassPart {
+  readonly id: number;
   readonly number: number;
   readonly title: string;
   readonly opensAt: Date | null;
@@ -14,6 +15,8 @@ export interface ClassPart {
 }
 
 export interface ClassStudent {
+  /** Public id. */
+  readonly seat: string;
   readonly name: string;
   readonly seriesId: number;
   readonly startedAt: Date;
@@ -23,6 +26,8 @@ export interface ClassStudent {
   readonly done: number;
   readonly verdict: Verdict | null;
   readonly lastStepAt: Date;
+  /** When she was last nudged from this workroom; null when never. */
+  readonly nudgedAt: Date | null;
 }
 
 export interface ClassSeries {
@@ -46,8 +51,8 @@ interface PartRow {
   readonly isPublished: number; readonly amountKeys: string[] | null; readonly steps: number | null;
 }
 interface SeatRow {
-  readonly id: number; readonly seriesId: number; readonly name: string; readonly startedAt: Date; readonly source: ClassStudent['source'];
-  readonly tickedAt: Date | null; readonly shownAt: Date | null; readonly finishedAt: Date | null;
+  readonly id: number; readonly seat: string; readonly seriesId: number; readonly name: string; readonly startedAt: Date; readonly source: ClassStudent['source'];
+  readonly tickedAt: Date | null; readonly shownAt: Date | null; readonly finishedAt: Date | null; readonly nudgedAt: Date | null;
 }
 interface MarkRow { readonly enrolmentId: number; readonly lessonId: number; readonly isFinished: number; readonly verdict: Verdict | null }
 interface TickRow { readonly enrolmentId: number; readonly part: string; readonly ticked: number }
@@ -66,10 +71,11 @@ const PARTS = `
    ORDER BY l.series_id, l.position, l.id`;
 
 const SEATS = `
-  SELECT e.id, e.series_id AS seriesId, u.name, e.started_at AS startedAt, e.source,
+  SELECT e.id, e.public_id AS seat, e.series_id AS seriesId, u.name, e.started_at AS startedAt, e.source,
          (SELECT MAX(t.changed_at) FROM ticks t WHERE t.enrolment_id = e.id) AS tickedAt,
          (SELECT MAX(p.created_at) FROM progress_photos p WHERE p.enrolment_id = e.id) AS shownAt,
-         (SELECT MAX(v.finished_at) FROM lesson_visits v WHERE v.enrolment_id = e.id) AS finishedAt
+         (SELECT MAX(v.finished_at) FROM lesson_visits v WHERE v.enrolment_id = e.id) AS finishedAt,
+         (SELECT MAX(n.sent_at) FROM notice_receipts r JOIN notices n ON n.id = r.notice_id WHERE r.user_id = e.user_id AND n.workroom_id = s.workroom_id AND n.kind = 'nudge') AS nudgedAt
     FROM enrolments e JOIN series s ON s.id = e.series_id JOIN users u ON u.id = e.user_id
    WHERE s.workroom_id IN (:workrooms) AND e.state = 'active'
    ORDER BY e.started_at DESC, e.id DESC`;
@@ -115,13 +121,13 @@ export async function classOf(workrooms: readonly number[]): Promise<ClassSeries
     };
     return {
       ...one,
-      parts: shown.map(({ title, opensAt, amountKeys }, index) => ({ number: index + 1, title, opensAt, amountKeys: amountKeys ?? [] })),
+      parts: shown.map(({ id, title, opensAt, amountKeys }, index) => ({ id, number: index + 1, title, opensAt, amountKeys: amountKeys ?? [] })),
       students: seats.filter(({ seriesId }) => seriesId === one.id).map((seat) => studentOf(seat, shown.map((part) => partOf(seat, part)))),
     };
   });
 }
 
-function studentOf({ name, seriesId, startedAt, source, tickedAt, shownAt, finishedAt }: SeatRow, parts: readonly PartOfOne[]): ClassStudent {
+function studentOf({ seat, name, seriesId, startedAt, source, tickedAt, shownAt, finishedAt, nudgedAt }: SeatRow, parts: readonly PartOfOne[]): ClassStudent {
   const steps = [startedAt, tickedAt, shownAt, finishedAt].filter((moment): moment is Date => moment !== null);
-  return { name, seriesId, startedAt, source, ...classPlace(parts), lastStepAt: new Date(Math.max(...steps.map((moment) => moment.getTime()))) };
+  return { seat, name, seriesId, startedAt, source, ...classPlace(parts), lastStepAt: new Date(Math.max(...steps.map((moment) => moment.getTime()))), nudgedAt };
 }

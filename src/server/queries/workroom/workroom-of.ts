@@ -9,9 +9,11 @@ export interface WorkroomFacts {
   readonly timeZone: string;
   readonly currency: string;
   readonly answerDays: number;
+  /** Empty until she has written one. */
+  readonly postalAddress: string;
 }
 
 export async function workroomOf(id: number): Promise<WorkroomFacts> {
-  const { name, handle, timeZone, currency, answerDays } = found(await Workroom.findByPk(id));
-  return { id, name, handle, timeZone, currency, answerDays };
+  const { name, handle, timeZone, currency, answerDays, postalAddress } = found(await Workroom.findByPk(id));
+  return { id, name, handle, timeZone, currency, answerDays, postalAddress };
 }
