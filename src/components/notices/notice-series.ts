@@ -22,9 +22,9 @@ export function whomWords(notice: NoticeInList, classes: readonly ClassSeries[])
   return audienceWords({ series, part, stillDays: notice.stillDays });
 }
 
-/** `3 people got it, 2 of them by letter too; 1 has marked it as read.` */
+/** `3 people have it, 2 by letter too; one has marked it as read.` */
 export function reachedWords({ reached, byLetter, read }: NoticeInList): string {
   const people = reached === 0 ? 'Nobody was there to get it' : `${reached} ${reached === 1 ? 'person has' : 'people have'} it`;
   const letters = byLetter === 0 ? '' : reached === 1 ? ', by letter too' : `, ${byLetter} by letter too`;
-  return `${people}${letters}${reached === 0 ? '' : `; ${read} marked it as read`}.`;
+  return `${people}${letters}${reached === 0 ? '' : `; ${read === 0 ? 'nobody has' : read === 1 ? 'one has' : `${read} have`} marked it as read`}.`;
 }

@@ -38,7 +38,7 @@ export async function makePeople(password: string, now: Date): Promise<DemoFolk>
     name: 'Saltmarsh Loom Room',
     about: 'I teach frame weaving in a room above a boat shed, at the edge of a salt marsh. What I show is what I see from there: water, mud, grass and a great deal of sky. I have taught people to weave for nineteen years, most of them people who were sure that they could not.',
     timeZone: 'Europe/Berlin',
-    postalAddress: 'Saltmarsh Loom Room, Boat shed 3, Fenmouth',
+    postalAddress: 'Boat shed 3, Fenmouth',
   });
   const cordage = await Workroom.create({
     ownerId: idOf('teodor@cordage.example'),
@@ -46,7 +46,7 @@ export async function makePeople(password: string, now: Date): Promise<DemoFolk>
     name: 'Brandl Cordage',
     about: 'Rope and knots, from the harbour to the wall. I come from a family of riggers; what I teach holds.',
     timeZone: 'Europe/Berlin',
-    postalAddress: 'Brandl Cordage, Old Quay 12, Taumund',
+    postalAddress: 'Old Quay 12, Taumund',
   });
   await WorkroomHelper.create({ workroomId: saltmarsh.id, userId: idOf('wren@saltmarsh.example') });
   return { users, saltmarsh, cordage };

@@ -1,5 +1,5 @@
 /** Whether a letter may still go to whom it was written for: asked at the last moment, since minds and mailboxes change. */
-import { Mail, RefusedAddress, User } from '#server/models/index.ts';
+import { RefusedAddress, User, type Mail } from '#server/models/index.ts';
 import { wantsLetters } from '#server/queries/letters/letter-choices.ts';
 
 /** Letters somebody waits for at the door. They are tried even where others were refused: one that arrives ends that. */

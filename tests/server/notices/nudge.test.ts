@@ -65,7 +65,7 @@ describe('a nudge', () => {
     const ctx = await contextFor(ilse);
     const results = await Promise.allSettled([nudgeStudent(ctx, input()), nudgeStudent(ctx, input()), nudgeStudent(ctx, input({ seat: other.publicId }))]);
     expect(results.filter(({ status }) => status === 'fulfilled')).toHaveLength(1);
-    await expect(nudgeStudent(await at('2026-12-04T09:59:59Z'), input())).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('within three days') });
+    await expect(nudgeStudent(await at('2026-12-04T09:59:59Z'), input())).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('Maud Ellery was nudged within 3 days') });
     await nudgeStudent(await at('2026-12-04T10:00:00Z'), input());
     expect(await NoticeReceipt.count()).toBe(2);
   });

@@ -4,7 +4,7 @@ import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, fieldError, found, signedIn } from '#server/errors.ts';
 import { Notice, Workroom } from '#server/models/index.ts';
 import { classOf } from '#server/queries/workroom/class-of.ts';
-import { ownSeries } from '../workroom/_own-series.ts';
+import { ownSeries } from '#server/use-cases/workroom/_own-series.ts';
 import { keepPostalAddress, ownNotice, readNoticeWords } from './_own-notice.ts';
 
 /**

@@ -1,6 +1,6 @@
 import type { NudgeInput } from '#contracts/notices.ts';
-import { nextNudgeAt, nudgeTitle } from '#core/notices/nudge.ts';
-import { dayAndTime } from '#core/timetable/day-and-time.ts';
+import { momentWords } from '#core/moment-words.ts';
+import { nextNudgeAt, NUDGE_DAYS, nudgeTitle } from '#core/notices/nudge.ts';
 import { titleHalves } from '#core/series/title.ts';
 import { audit } from '#server/audit.ts';
 import type { Context } from '#server/context.ts';
@@ -36,9 +36,9 @@ export async function nudgeStudent(ctx: Context, input: NudgeInput): Promise<Nud
     const workroom = found(await Workroom.findByPk(series.workroomId, { lock: true }));
     const now = ctx.clock.now();
     const next = nextNudgeAt(await lastNudgeOf(seat.userId, workroom.id));
-    if (next !== null && next > now) throw new AppError('CONFLICT', { says: `She was nudged within three days. The next word can go ${dayAndTime(next, now, actor.timeZone)}.` });
-    await keepPostalAddress(ctx, workroom, input.postalAddress);
     const to = found((await recipientsAt([seat.publicId], workroom.id, 'nudges'))[0]);
+    if (next !== null && next > now) throw new AppError('CONFLICT', { says: `${to.name} was nudged within ${NUDGE_DAYS} days. The next word can go from ${momentWords(next, actor.timeZone)}.` });
+    await keepPostalAddress(ctx, workroom, input.postalAddress);
     const notice = await Notice.create({
       workroomId: workroom.id, seriesId: series.id, authorId: actor.userId, kind: 'nudge', state: 'sent', title: nudgeTitle(titleHalves(series.title).name), source, tree, sentAt: now,
     });
