@@ -2,8 +2,8 @@
 import { emptyAllTables } from '#server/db/empty-tables.ts';
 import { actingAs } from '#server/demo/acting-as.ts';
 import { makePeople, makeSteward, whoLivesHere } from '#server/demo/people.ts';
-import { askAndAnswer } from '#server/demo/questions.ts';
 import { askForLetters, bringMaudToPartTwo, giveSeat, writeToClass } from '#server/demo/progress.ts';
+import { askAndAnswer } from '#server/demo/questions.ts';
 import { bringIn } from '#server/demo/series.ts';
 import { drawVideos } from '#server/demo/videos.ts';
 import type { User } from '#server/models/index.ts';

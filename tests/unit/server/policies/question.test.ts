@@ -5,7 +5,7 @@ import { mayAnswer, mayAsk, mayChangeWords, mayPutBackWords, mayReportWords, may
 
 const WORKROOM = 7;
 const person = (userId: number, given: Partial<Actor> = {}): Actor => ({
-  userId, publicId: String(userId), name: '', email: '', addressConfirmed: true, isSteward: false, workroomId: null, workroomName: null,
+  userId, publicId: String(userId), name: '', email: '', addressConfirmed: true, addressRefused: false, isSteward: false, workroomId: null, workroomName: null,
   helpsInWorkroomIds: [], units: 'cm', timeZone: 'UTC', scheme: 'system', unreadNotices: 0, sessionId: '', provedAt: new Date(0), ...given,
 });
 
