@@ -41,7 +41,7 @@ test.describe('a teacher', () => {
         await page.goto('/workroom/students');
         await page.getByRole('link', { name: 'Write a notice' }).click();
         await page.getByLabel('Heading').fill(title);
-        await page.getByLabel('Your words').fill('# No headings');
+        await page.getByLabel('Your words').fill('## No headings');
         await page.getByRole('button', { name: 'Keep it and look it over' }).click();
         await expect(page.getByText('A notice holds paragraphs, lists, bold words, links and amounts.')).toBeVisible();
         await expect(page.getByLabel('Heading')).toHaveValue(title);
@@ -53,7 +53,7 @@ test.describe('a teacher', () => {
         await expect(page.getByRole('article')).toContainText(/Yours is 30\scm wide/);
         await expect(page.getByText(/people get it under Notices/)).toBeVisible();
         if (javaScriptEnabled) await expectFaultless(page);
-        await page.getByText('Later', { exact: true }).click();
+        await page.getByRole('radio', { name: 'Later' }).check();
         await page.getByLabel('Later: on').fill('2020-01-01T09:00');
         await page.getByRole('button', { name: 'Send' }).click();
         await expect(page.getByText('This moment has passed.')).toBeVisible();
@@ -71,7 +71,7 @@ test.describe('a teacher', () => {
 
   test('looks at a nudge before it goes, and is told that one in three days is enough', async ({ page, browser, request: api }) => {
     const name = `Nell ${Date.now().toString(36)}`;
-    const hers = await browser.newContext({ baseURL: process.env['FELLMARK_TEST_URL'] ?? '' });
+    const hers = await browser.newContext({ storageState: { cookies: [], origins: [] } });
     await newStudent(await hers.newPage(), api, undefined, name);
     await hers.close();
     await page.goto('/workroom/students');
@@ -105,7 +105,6 @@ test('a student reads a notice in her page and in the letter she asked for, and 
 
   await page.goto('/loom');
   const told = page.getByRole('region', { name: 'Said to you' });
-  await expect(told.getByText(title)).toBeVisible();
   await told.getByRole('link', { name: `Read: ${title}` }).click();
   await expect(page.getByText('Push a cork on the corner nails.')).toBeVisible();
   await page.getByRole('button', { name: `Mark as read: ${title}` }).click();
