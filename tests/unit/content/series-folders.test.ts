@@ -8,6 +8,7 @@ import { amountOf } from '#core/craft/amounts.ts';
 import { fitPiece } from '#core/craft/fit.ts';
 import type { MacramePiece } from '#core/craft/macrame/piece.ts';
 import { planPiece } from '#core/craft/plan.ts';
+import { contradictions } from '#core/gathering/contradictions.ts';
 import { parseLessonText, type LessonText } from '#core/lesson-text/parse-lesson-text.ts';
 import { plainWords } from '#core/lesson-text/plain-text.ts';
 import type { Block, Component, LessonNode } from '#core/lesson-text/tree.ts';
@@ -62,6 +63,12 @@ describe.each(folders)('the series in %s', (folder) => {
       expect(part).toBeLessThanOrEqual(index);
       expect(series.lessons[part - 1]?.checkpoint).toBeDefined();
     });
+  });
+
+  test('has lists that do not contradict one another', () => {
+    const lines = series.lessons.flatMap(({ gathering }, index) => gathering.map(({ kind, name, amountText, untilPart }, at) => (
+      { publicId: `${index}-${at}`, part: index + 1, kind, name, amountText: amountText ?? null, untilPart: untilPart ?? null })));
+    expect(contradictions(lines, series.lessons.length).map(({ part, says }) => `Part ${part}: ${says}`)).toEqual([]);
   });
 
   test('says of each thing to gather how much of it, and until which part', () => {
