@@ -20,6 +20,8 @@ export const RYA_KEYS: FieldsOfKeys = {
 };
 export const SHAPE_KEYS: FieldsOfKeys = { shape: 'shape', baseMm: 'base', heightMm: 'shape-height', radiusMm: 'radius', symmetric: 'sides', pickSpacingMm: 'shape-height' };
 
+export const ROD_KEYS: FieldsOfKeys = { massG: 'rod-load', lengthMm: 'rod-length', riseMm: 'rise' };
+
 const FIELDS: readonly (readonly [string, ReckonerField])[] = [
   ['/size/widthMm', 'width'],
   ['/size/heightMm', 'height'],

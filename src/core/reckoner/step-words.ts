@@ -2,7 +2,7 @@
 import type { Working, WorkingInput, WorkingUnit } from '#core/craft/show-how/working.ts';
 import type { Trust } from '#core/craft/trust.ts';
 import { FIELD_LABELS } from '#core/reckoner/field-labels.ts';
-import { fieldOfPath, fieldOfYarn, RYA_KEYS, SHAPE_KEYS, SOUMAK_KEYS, type FieldsOfKeys } from '#core/reckoner/field-of-path.ts';
+import { fieldOfPath, fieldOfYarn, ROD_KEYS, RYA_KEYS, SHAPE_KEYS, SOUMAK_KEYS, type FieldsOfKeys } from '#core/reckoner/field-of-path.ts';
 import type { ReckonerField } from '#core/reckoner/reckoner-form.ts';
 
 const UNITS: Readonly<Record<WorkingUnit, string>> = {
@@ -57,7 +57,7 @@ const FROM_PARTS: Readonly<Record<string, GivenAt>> = {
   '/pickSpacingMm': { part: 'cloth', label: 'How much yarn' },
 };
 
-const KEYS_OF_PARTS = { rya: RYA_KEYS, shape: SHAPE_KEYS, soumak: SOUMAK_KEYS, piece: RYA_KEYS } as const;
+const KEYS_OF_PARTS = { rod: ROD_KEYS, rya: RYA_KEYS, shape: SHAPE_KEYS, soumak: SOUMAK_KEYS, piece: RYA_KEYS } as const;
 
 function fieldAt(part: string, path: string): ReckonerField | undefined {
   if (part === 'yarn') return fieldOfYarn(path);

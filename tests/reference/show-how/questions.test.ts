@@ -4,6 +4,8 @@ import { expect, test } from 'vitest';
 import { reckon } from '#core/craft/reckon.ts';
 import { explainRya, explainShape, explainSoumak, explainTakeUp, explainYarn } from '#core/craft/show-how/explain.ts';
 import type { Working } from '#core/craft/show-how/working.ts';
+import { answerForm } from '#core/reckoner/answer-form.ts';
+import { RECKONER_DEFAULTS } from '#core/reckoner/reckoner-form.ts';
 import type { Outcome } from '#core/outcome.ts';
 import { cases } from '../../support/random-cases.ts';
 import { expectReachable, faultsOf, workingsOf } from './follow.ts';
@@ -96,4 +98,16 @@ test('a yarn says where its numbers came from: measured before the label, the la
   expect(trustOf({ class: 4, ball: { metres: 180, grams: 100 } }, 'compressedDiameterMm')).toBe('formula');
   expect(trustOf({ count: { text: '6/6', system: 'nm' } }, 'tex')).toBe('practice');
   expect(trustOf({ count: { text: '6/6', system: 'nm' }, ball: { metres: 180, grams: 100 } }, 'tex')).toBe('label');
+});
+
+test('a rod and its cord, as the reckoner asks for them', () => {
+  const asked = fc.record({ 'rod-load': between(1, 99_000), 'rod-length': between(4.1, 499), rise: between(0.1, 499) });
+  fc.assert(fc.property(asked, (typed) => {
+    const texts = Object.fromEntries(Object.entries(typed).map(([field, value]) => [field, value.toFixed(2)]));
+    const { rod } = answerForm({ ...RECKONER_DEFAULTS, ...texts });
+    const workings = rod.workings?.() ?? [];
+    expect(workings.map(({ id }) => id).sort()).toEqual(rod.lines.map(({ step }) => step).sort());
+    const [question] = rod.asked as readonly [unknown];
+    expect(faultsOf(workings, question)).toEqual([]);
+  }), RUNS);
 });

@@ -169,7 +169,7 @@ function noteRod({ book, parts: { rod }, plan }: Explained, mass: Working): void
       ? { formula: 'w + 2 * o', inputs: [from('w', width), standing({ symbol: 'o', name: 'rod beyond the knots', value: HANGING.overhangMm, unit: 'mm' }, DEFAULTS.overhang)] }
       : { formula: 'l', inputs: [given({ symbol: 'l', name: 'length of the rod', value: rod.lengthMm, unit: 'mm' }, '/rod/lengthMm', 'measured')] }),
   });
-  noteLeastRod(book, 'rod.minDiameterMm', 'thinnest rod that does not sag', mass, from('s', length), plan.rod.minDiameterMm);
+  noteLeastRod(book, 'rod.minDiameterMm', 'thinnest rod that does not sag', from('m', mass), from('s', length), plan.rod.minDiameterMm);
 }
 
 function noteWork({ book, plan }: Explained, columns: readonly NotedColumn[], foot: readonly NotedSection[]): void {

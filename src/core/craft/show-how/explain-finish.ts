@@ -10,7 +10,7 @@ import type { NotedBand } from '#core/craft/show-how/explain-bands.ts';
 import { asWound } from '#core/craft/show-how/explain-warp.ts';
 import { from, given, standing, sumOf, WEIGHS_NOTHING, type Standing } from '#core/craft/show-how/notebook.ts';
 import { noteHoursInAll, pace } from '#core/craft/show-how/note-hours.ts';
-import { noteLeastRod } from '#core/craft/show-how/note-rod.ts';
+import { noteCord, noteCordTension, noteFixing, noteLeastRod, noteSpan } from '#core/craft/show-how/note-rod.ts';
 import { DEFAULTS, RULES } from '#core/craft/show-how/sources.ts';
 import type { Working, WorkingInput, WorkingUnit } from '#core/craft/show-how/working.ts';
 import { hoursByWork, secondsPerRow } from '#core/craft/time.ts';
@@ -41,19 +41,12 @@ function noteHanging(on: DressedWorkings, { cut, massG }: FrameLoomPlan, mass: W
     ? { formula: 'W + 2 * o', inputs: [given({ symbol: 'W', name: 'width of the cloth', value: piece.size.widthMm, unit: 'mm' }, '/size/widthMm', 'counted'), rule('o', 'dowel beyond the cloth', HANGING.overhangMm, 'mm', DEFAULTS.overhang)] }
     : { formula: 'l', inputs: [given({ symbol: 'l', name: 'length of the dowel', value: dowel.lengthMm, unit: 'mm' }, '/dowel/lengthMm', 'counted')] };
   const length = book.note({ ...what, ...own, ...RULES.arithmetic });
-  const span = book.note({
-    id: 'cut.cordSpanMm', name: 'between the places where the cord is tied', formula: 'l - 2 * i', inputs: [from('l', length), rule('i', 'from a dowel end to its knot', HANGING.cordInsetMm, 'mm', DEFAULTS.cord)],
-    value: cordSpan(cut.dowel.lengthMm), unit: 'mm', ...RULES.arithmetic,
-  });
+  const span = noteSpan(book, 'cut.cordSpanMm', from('l', length), cordSpan(cut.dowel.lengthMm));
   const [s, rise] = [from('s', span), rule('v', 'how high the cord rises', HANGING.cordRiseMm, 'mm', DEFAULTS.cord)];
-  noteLeastRod(book, 'cut.dowel.minDiameterMm', 'thinnest dowel that does not sag', mass, s, cut.dowel.minDiameterMm);
-  book.note({
-    id: 'cut.cordMm', name: 'hanging cord', formula: '2 * hypot(s / 2, v) + 2 * k', inputs: [s, rise, rule('k', 'cord of one knot', HANGING.cordKnotMm, 'mm', DEFAULTS.cord)], value: cut.cordMm, unit: 'mm', ...RULES.euclid,
-  });
+  noteLeastRod(book, 'cut.dowel.minDiameterMm', 'thinnest dowel that does not sag', from('m', mass), s, cut.dowel.minDiameterMm);
+  noteCord(book, 'cut.cordMm', s, rise, cut.cordMm);
   if (cut.lashingMm !== undefined) noteLashing(on, dowel, cut.lashingMm);
-  book.note({
-    id: 'cut.cordTensionN', name: 'pull on the cord', formula: 'm / 1000 * 9.80665 / (2 * sin(atan2(2 * v, s)))', inputs: [from('m', mass), rise, s], value: cordTension(massG, span.value), unit: 'N', ...RULES.forces,
-  });
+  noteCordTension(book, 'cut.cordTensionN', from('m', mass), s, rise, cordTension(massG, span.value));
 }
 
 type WorkKind = keyof ToldBand['work'];
@@ -94,7 +87,7 @@ function noteHours(on: DressedWorkings, bands: readonly NotedBand[], woven: read
 export function noteFinish(on: DressedWorkings, bands: readonly NotedBand[], woven: readonly WovenBand[], plan: FrameLoomPlan, masses: readonly Working[]): void {
   const inputs = masses.map((mass, at) => from(`m${String(at)}`, mass));
   const mass = on.book.note({ id: 'massG', name: 'mass of the finished piece', formula: sumOf(inputs), inputs, value: plan.massG, unit: 'g', ...RULES.arithmetic });
-  on.book.note({ id: 'cut.fixingHoldsG', name: 'what the fixing in the wall must hold', formula: 'k * m', inputs: [rule('k', 'times the piece', HANGING.fixingFactor, 'ratio', DEFAULTS.fixing), from('m', mass)], value: plan.cut.fixingHoldsG, unit: 'g', ...RULES.arithmetic });
+  noteFixing(on.book, 'cut.fixingHoldsG', from('m', mass), plan.cut.fixingHoldsG);
   noteCard(on, plan);
   noteHanging(on, plan, mass);
   noteHours(on, bands, woven, plan);

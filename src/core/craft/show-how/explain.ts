@@ -11,6 +11,7 @@ import { Fields } from '#core/craft/reading/fields.ts';
 import { Findings } from '#core/craft/reading/findings.ts';
 import { notePiece } from '#core/craft/show-how/explainers.ts';
 import { noteRya, noteShapeQuestion, noteSoumak, noteTakeUp } from '#core/craft/show-how/explain-questions.ts';
+import { noteRod, type AnsweredRod, type AskedRod } from '#core/craft/show-how/note-rod.ts';
 import { noteCounts, notePlies, noteThread } from '#core/craft/show-how/explain-thread.ts';
 import { Notebook } from '#core/craft/show-how/notebook.ts';
 import type { Working } from '#core/craft/show-how/working.ts';
@@ -59,6 +60,13 @@ export const explainSoumak = explainQuestion(noteSoumak);
 export const explainRya = explainQuestion(noteRya);
 /** Ids as in the answer: `rows`, `areaMm2` … */
 export const explainShape = explainQuestion(noteShapeQuestion);
+
+/** What was asked and answered is known already; ids as in the answer: `minDiameterMm`, `cordMm` … */
+export function explainRod(asked: AskedRod, rod: AnsweredRod): readonly Working[] {
+  const book = new Notebook();
+  noteRod(book, asked, rod);
+  return book.workings;
+}
 
 /**
  * The workings of a whole piece of any craft. Ids are paths in the plan where it has the number

@@ -83,6 +83,7 @@ export const DEFAULTS = {
   tie: COMMON,
   railMargin: COMMON,
   lashing: COMMON,
+  stock: practice('common practice: rods are sold by the whole millimetre or sixteenth of an inch, none straight below 8 mm'),
   fixing: practice('common practice: a fixing holds several times the piece'),
   oneEnd: exact('between every two ends, unless the band says otherwise'),
   seat: COMMON,
