@@ -9,6 +9,7 @@ import path from 'node:path';
 import { expect, test as base, type Browser, type Page } from 'playwright/test';
 import { makeClip } from '../support/clips.ts';
 import { stateOf } from './support/demo-people.ts';
+import { fillPiece } from './support/fill-piece.ts';
 import { fillText } from './support/lesson-text.ts';
 import { letterTo } from './support/mail-tray.ts';
 import { newPerson, signInHere, type NewPerson } from './support/new-person.ts';
@@ -84,10 +85,7 @@ test('a newcomer builds a series in seven parts, and a student finds, buys and s
 
   await test.step('the piece: three bands, drawn and reckoned as she types', async () => {
     await page.goto(`${desk}/piece`);
-    await expect(page.locator('astro-island[ssr]')).toHaveCount(0);
-    for (const [label, words] of [['Width', '24'], ['Height', '30'], ['Nail to nail, upright', '50'], ['Nail to nail, along', '8'], ['Tex', '500'], ['Metres in 100 g', '333']] as const) {
-      await main(page).getByLabel(label, { exact: true }).first().fill(words);
-    }
+    await fillPiece(page, { Width: '24', Height: '30', 'Nail to nail, along': '8' });
     await main(page).getByRole('button', { name: 'Save the piece' }).first().click();
     await expect(page.getByText('The piece is saved.')).toBeVisible();
   });

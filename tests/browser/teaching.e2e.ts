@@ -2,6 +2,7 @@
 import { randomBytes } from 'node:crypto';
 import { expect, type Page } from 'playwright/test';
 import { stateOf } from './support/demo-people.ts';
+import { fillPiece } from './support/fill-piece.ts';
 import { expectText, fillText, textField } from './support/lesson-text.ts';
 import { expectFaultless, test } from './support/test.ts';
 
@@ -31,15 +32,9 @@ async function writePart(page: Page, desk: string, title: string, words: string,
   await expect(inMain(page).getByText(/^Saved \d\d:\d\d$/).or(page.getByRole('status').filter({ hasText: /^Saved \d\d:\d\d$/ })).first()).toBeVisible();
 }
 
-/** A small plain piece: the form offers the rest. */
 async function describePiece(page: Page, desk: string, withScript: boolean): Promise<void> {
   await page.goto(`${desk}/piece`);
-  // The form is drawn anew by its script, so its fields are filled once that is awake.
-  if (withScript) await expect(page.locator('astro-island[ssr]')).toHaveCount(0);
-  const form = inMain(page);
-  for (const [label, words] of [['Width', '20'], ['Height', '20'], ['Nail to nail, upright', '45'], ['Nail to nail, along', '10'], ['Tex', '500'], ['Metres in 100 g', '333']] as const) {
-    await form.getByLabel(label, { exact: true }).first().fill(words);
-  }
+  await fillPiece(page, {}, withScript);
   await press(page, 'Save the piece');
   await expect(page.getByText('The piece is saved.')).toBeVisible();
 }
