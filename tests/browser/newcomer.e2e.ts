@@ -55,7 +55,7 @@ async function letIn(browser: Browser, { email }: NewPerson, workroom: string): 
   if (await prove.isVisible()) {
     await prove.click();
     await office.getByLabel('Password', { exact: true }).fill(process.env['FELLMARK_TEST_PASSWORD'] ?? '');
-    await main(office).getByRole('button').first().click();
+    await main(office).getByRole('button', { name: 'Go on' }).click();
   }
   await office.getByLabel('Name of the workroom').fill(workroom);
   await office.getByLabel('Handle').fill(`nell-${randomBytes(3).toString('hex')}`);
