@@ -89,15 +89,33 @@ function readCords(fields: Fields): ReadonlyMap<string, KnownCord> {
   return cords;
 }
 
-function readName(fields: Fields): { readonly name?: string } {
-  const name = fields.optionalText('name', { name: 'Name', maxLength: 40 });
-  if (name === undefined) return {};
-  if (!NAME.test(name)) fields.reject('E_ENUM', 'name', 'A name is made of small letters, figures and hyphens, such as crown or cord-2.');
-  return { name };
+/** What the parts of a piece are held against as they are read: names go to one part each, roles must be there. */
+class Roll {
+  readonly #roles: ReadonlySet<string>;
+  readonly #named = new Set<string>();
+
+  constructor(roles: ReadonlySet<string>) {
+    this.#roles = roles;
+  }
+
+  readName(fields: Fields, kind: 'column' | 'section'): { readonly name?: string } {
+    const name = fields.optionalText('name', { name: 'Name', maxLength: 40 });
+    if (name === undefined) return {};
+    if (!NAME.test(name)) fields.reject('E_ENUM', 'name', 'A name is made of small letters, figures and hyphens, such as crown or cord-2.');
+    else if (this.#named.has(`${kind} ${name}`)) fields.reject('E_ENUM', 'name', `Something else is called ${name} already.`);
+    this.#named.add(`${kind} ${name}`);
+    return { name };
+  }
+
+  /** The role as it was read. */
+  known<T extends string | undefined>(fields: Fields, role: T): T {
+    if (role !== undefined && !this.#roles.has(role)) fields.reject('E_ENUM', 'yarn', `The piece has no cord in the role “${role}”.`);
+    return role;
+  }
 }
 
-function readSquareKnots(fields: Fields): Section {
-  const named = { ...readName(fields), technique: 'square-knots' as const, ...present({ gapMm: fields.optionalNumber('gapMm', GAP), spiral: fields.optionalFlag('spiral', 'Turning') }) };
+function readSquareKnots(fields: Fields, roll: Roll): Section {
+  const named = { ...roll.readName(fields, 'section'), technique: 'square-knots' as const, ...present({ gapMm: fields.optionalNumber('gapMm', GAP), spiral: fields.optionalFlag('spiral', 'Turning') }) };
   const byCount = fields.has('knots');
   if (byCount && fields.has('heightMm')) {
     fields.take('heightMm');
@@ -106,49 +124,49 @@ function readSquareKnots(fields: Fields): Section {
   return byCount ? { ...named, knots: fields.number('knots', count('Knots', MOST.knots)) } : { ...named, heightMm: fields.number('heightMm', length('Height of the knotted stretch')) };
 }
 
-function readSection(value: unknown, path: string, among: readonly [Section['technique'], ...Section['technique'][]], findings: Findings): Section | undefined {
+function readSection(value: unknown, path: string, among: readonly [Section['technique'], ...Section['technique'][]], roll: Roll, findings: Findings): Section | undefined {
   return findings.soundly(() => {
     const fields = Fields.of(value, path, 'A section', findings);
     const before = findings.count;
     const technique = fields.choice('technique', 'Technique', among);
     if (findings.count > before) return undefined;
-    const section = readTechnique(technique, fields);
+    const section = readTechnique(technique, fields, roll);
     fields.end();
     return section;
   });
 }
 
-function readTechnique(technique: Section['technique'], fields: Fields): Section {
-  if (technique === 'square-knots') return readSquareKnots(fields);
-  const named = readName(fields);
+function readTechnique(technique: Section['technique'], fields: Fields, roll: Roll): Section {
+  if (technique === 'square-knots') return readSquareKnots(fields, roll);
+  const named = roll.readName(fields, 'section');
   switch (technique) {
     case 'alternating':
       return { ...named, technique, rows: fields.number('rows', count('Rows', MOST.knots)), ...present({ gapMm: fields.optionalNumber('gapMm', GAP) }) };
     case 'half-hitches':
       return { ...named, technique, rows: fields.number('rows', count('Rows', 1000)), ...present({ slant: fields.optionalChoice('slant', 'Slant', ['level', 'left', 'right']) }) };
     case 'gathering':
-      return { ...named, technique, wraps: fields.number('wraps', count('Turns', 200)), ...present({ yarn: fields.optionalText('yarn', { name: 'Role of the cord', maxLength: 40 }) }) };
+      return { ...named, technique, wraps: fields.number('wraps', count('Turns', 200)), ...present({ yarn: roll.known(fields, fields.optionalText('yarn', { name: 'Role of the cord', maxLength: 40 })) }) };
     default:
       return { ...named, technique, heightMm: fields.number('heightMm', length(technique === 'fringe' ? 'Length of the fringe' : 'Height of the plain stretch')) };
   }
 }
 
-function readSections(list: readonly unknown[], path: string, among: readonly [Section['technique'], ...Section['technique'][]], findings: Findings): Section[] {
-  const sections = list.map((value, index) => readSection(value, below(path, index), among, findings));
+function readSections(list: readonly unknown[], path: string, among: readonly [Section['technique'], ...Section['technique'][]], roll: Roll, findings: Findings): Section[] {
+  const sections = list.map((value, index) => readSection(value, below(path, index), among, roll, findings));
   sections.forEach((section, index) => {
     if (section?.technique === 'fringe' && index < sections.length - 1) findings.reject('E_FIT', below(path, index), 'A fringe is where the cords end: nothing can follow it. Make it the last section.');
   });
   return sections.flatMap((section) => (section === undefined ? [] : [section]));
 }
 
-function readColumn(value: unknown, path: string, hasFoot: boolean, findings: Findings): Column | undefined {
+function readColumn(value: unknown, path: string, hasFoot: boolean, roll: Roll, findings: Findings): Column | undefined {
   return findings.soundly(() => {
     const fields = Fields.of(value, path, 'A column', findings);
     const column = {
-      ...readName(fields),
-      yarn: fields.text('yarn', { name: 'Role of the cord', maxLength: 40 }),
+      ...roll.readName(fields, 'column'),
+      yarn: roll.known(fields, fields.text('yarn', { name: 'Role of the cord', maxLength: 40 })),
       cords: fields.number('cords', count('Folded cords', MOST.ends / 2)),
-      sections: readSections(fields.list('sections', 'Sections', MOST.sections), fields.pathOf('sections'), TECHNIQUES, findings),
+      sections: readSections(fields.list('sections', 'Sections', MOST.sections), fields.pathOf('sections'), TECHNIQUES, roll, findings),
     };
     fields.end();
     const inFours = column.sections.some(({ technique }) => technique === 'square-knots' || technique === 'alternating');
@@ -156,29 +174,6 @@ function readColumn(value: unknown, path: string, hasFoot: boolean, findings: Fi
     if (hasFoot && column.sections.at(-1)?.technique === 'fringe') fields.reject('E_FIT', 'sections', 'A fringe is where the cords end, and the foot goes on with all of them. Make the fringe the last section of the foot.');
     return column;
   });
-}
-
-/** Names once each, and roles that are there. */
-function checkNames(parts: { readonly columns: readonly Column[]; readonly foot: readonly Section[] }, roles: ReadonlySet<string>, findings: Findings): void {
-  const seen = new Set<string>();
-  const once = (kind: string, name: string | undefined, path: string): void => {
-    if (name === undefined) return;
-    if (seen.has(`${kind} ${name}`)) findings.reject('E_ENUM', `${path}/name`, `Something else is called ${name} already.`);
-    seen.add(`${kind} ${name}`);
-  };
-  const known = (role: string | undefined, path: string): void => {
-    if (role !== undefined && !roles.has(role)) findings.reject('E_ENUM', `${path}/yarn`, `The piece has no cord in the role “${role}”.`);
-  };
-  const sections = (list: readonly Section[], path: string): void => list.forEach((section, index) => {
-    once('section', section.name, below(path, index));
-    if (section.technique === 'gathering') known(section.yarn, below(path, index));
-  });
-  parts.columns.forEach((column, index) => {
-    once('column', column.name, `/columns/${String(index)}`);
-    known(column.yarn, `/columns/${String(index)}`);
-    sections(column.sections, `/columns/${String(index)}/sections`);
-  });
-  sections(parts.foot, '/foot');
 }
 
 function readTakes(fields: Fields): PieceParts['takes'] {
@@ -208,14 +203,13 @@ export function readPiece(fields: Fields): PieceParts | undefined {
   return findings.soundly(() => {
     const rod = readRod(fields);
     const cords = readCords(fields);
-    const named = new Set(Object.keys(Object.fromEntries(fields.group('yarns', 'The group of cords').entries())));
-    const columns = fields.list('columns', 'Columns', MOST.columns).flatMap((value, index) => readColumn(value, `/columns/${String(index)}`, fields.has('foot'), findings) ?? []);
-    const foot = fields.has('foot') ? readSections(fields.list('foot', 'Foot', MOST.sections), '/foot', FOOT, findings) : [];
+    const roll = new Roll(new Set(fields.group('yarns', 'The group of cords').entries().map(([role]) => role)));
+    const columns = fields.list('columns', 'Columns', MOST.columns).flatMap((value, index) => readColumn(value, `/columns/${String(index)}`, fields.has('foot'), roll, findings) ?? []);
+    const foot = fields.has('foot') ? readSections(fields.list('foot', 'Foot', MOST.sections), '/foot', FOOT, roll, findings) : [];
     fields.take('foot');
     const parts = { rod, cords, columns, foot: foot as readonly FootSection[], takes: readTakes(fields), ...readAllowances(fields) };
     fields.optionalNumber('seed', { name: 'Seed of the drawing', min: 0, max: Number.MAX_SAFE_INTEGER, whole: true });
     fields.end();
-    checkNames(parts, named, findings);
     const ends = columns.reduce((sum, column) => sum + 2 * column.cords, 0);
     if (ends > MOST.ends) findings.reject('E_RANGE', '/columns', `${String(ends)} ends are too many to knot. Up to ${String(MOST.ends)} work.`);
     return parts;

@@ -180,7 +180,7 @@ export class Fields {
       return [];
     }
     if (value.length > max) {
-      this.reject('E_RANGE', key, `${name}: ${String(value.length)} are too many to weave. Up to ${String(max)} work.`);
+      this.reject('E_RANGE', key, `${name}: ${String(value.length)} are too many. Up to ${String(max)} work.`);
       return [];
     }
     return value;

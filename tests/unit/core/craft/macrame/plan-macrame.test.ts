@@ -95,6 +95,7 @@ describe('a knotted piece that cannot be made', () => {
     ['two sections of one name', hangingOf([{ technique: 'plain', name: 'a', heightMm: 10 }, { technique: 'plain', name: 'a', heightMm: 10 }]), ['E_ENUM /columns/0/sections/1/name']],
     ['a piece longer than a house', hangingOf([{ technique: 'plain', heightMm: 20_000 }, { technique: 'plain', heightMm: 20_000 }]), ['E_RANGE /columns']],
     ['a ring without a hole', { ...BRAID, rod: { kind: 'ring', diameterMm: 12, thickMm: 6 } }, ['E_FIT /rod/thickMm']],
+    ['a name that is taken, told at its own column though the one before cannot be read', { ...BRAID, columns: [...BRAID.columns, 3, ...BRAID.columns] }, ['E_ENUM /columns/1', 'E_ENUM /columns/2/name', 'E_ENUM /columns/2/sections/0/name']],
   ])('%s', (_, piece, problems) => {
     expect(refusals(piece)).toEqual(problems);
   });

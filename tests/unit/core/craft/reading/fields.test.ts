@@ -77,7 +77,7 @@ describe('a list', () => {
   test('has at least one thing and at most so many', () => {
     expect(list([1, 2])).toEqual({ value: [1, 2], said: [] });
     for (const x of [undefined, [], 'ab', { length: 1 }]) expect(list(x)).toEqual({ value: [], said: ['E_ENUM /x: Bands: at least one is needed, as a list.'] });
-    expect(list([1, 2, 3])).toEqual({ value: [], said: ['E_RANGE /x: Bands: 3 are too many to weave. Up to 2 work.'] });
+    expect(list([1, 2, 3])).toEqual({ value: [], said: ['E_RANGE /x: Bands: 3 are too many. Up to 2 work.'] });
   });
 });
 
