@@ -14,8 +14,6 @@ export interface GatherBoardProps {
   sum: Omit<GatherSumProps, 'left' | 'total'>;
 }
 
-const GROUPS = [['yarn', 'Yarn'], ['tool', 'Tools'], ['material', 'Material']] as const;
-
 /** The list to shop by, and beside it what is still to get. */
 export function GatherBoard({ seat, ...board }: GatherBoardProps) {
   return seat === null ? <Board {...board} ticks={null} /> : <TickedBoard {...board} seat={seat} />;
@@ -27,7 +25,7 @@ function TickedBoard({ seat, ...board }: Omit<GatherBoardProps, 'seat'> & { seat
 
 function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'seat'> & { ticks: Ticks | null }) {
   const had = (some: readonly ShownLine[]): number => (ticks === null ? 0 : some.filter(({ key }) => ticks.isTicked(key)).length);
-  const groups = GROUPS.map(([kind, title]) => ({ kind, title, own: lines.filter((line) => line.kind === kind) })).filter(({ own }) => own.length > 0);
+  const groups = ([['yarn', sum.material], ['tool', 'Tools'], ['material', 'Material']] as const).map(([kind, title]) => ({ kind, title, own: lines.filter((line) => line.kind === kind) })).filter(({ own }) => own.length > 0);
   return (
     <>
       <form method="post" action={action} className="gather-list">
