@@ -8,6 +8,7 @@ import path from 'node:path';
 import { expect, test as bare } from 'playwright/test';
 import { makeClip } from '../support/clips.ts';
 import { stateOf } from './support/demo-people.ts';
+import { makeSeries } from './support/new-series.ts';
 import { test } from './support/test.ts';
 
 const MIB = 1_048_576;
@@ -131,5 +132,22 @@ bare.describe('a film', () => {
     await page.getByText('From a file, or as a text').click();
     await expect(page.getByLabel('As WebVTT text')).toHaveValue('WEBVTT\n\n00:00:01.000 --> 00:00:02.000\nOver four, back two.\n');
     await context.close();
+  });
+
+  test('that no text speaks of is deleted for good, after a question', async ({ page }) => {
+    const series = await makeSeries(page, 'Warp');
+    await page.getByRole('main').getByRole('link', { name: 'Warp', exact: true }).click();
+    await page.getByRole('main').getByRole('link', { name: 'Video', exact: true }).click();
+    await page.getByTestId('video-chooser').setInputFiles(makeClip(folder, 'slip.mp4'));
+    await page.getByRole('link', { name: 'Write the captions' }).click({ timeout: 120_000 });
+    await page.getByRole('button', { name: 'Delete this video' }).press('Enter');
+    const asks = page.getByRole('dialog', { name: 'Delete “Warp”?' });
+    await expect(asks).toContainText('nobody can bring them back');
+    await asks.getByRole('button', { name: 'Keep it' }).press('Enter');
+    await expect(asks).toBeHidden();
+    await page.getByRole('button', { name: 'Delete this video' }).press('Enter');
+    await asks.getByRole('button', { name: 'Delete it for good' }).press('Enter');
+    await expect(page.getByText(/deleted/i).first()).toBeVisible();
+    expect((await page.goto(`${series}/videos/warp`))?.status()).toBe(404);
   });
 });
