@@ -33,7 +33,7 @@ const stages = {
 
 /** Two cores: what is in different lanes runs side by side, and lanes of one row wait for the row before. */
 const ROWS = /** @type {const} */ ([
-  [['imports', 'types', 'lint'], ['build', 'unit', 'edge', 'islands', 'astro', 'server']],
+  [['imports', 'types', 'lint', 'edge', 'astro'], ['build', 'unit', 'islands', 'server']],
   [['browser']],
 ]);
 
