@@ -1,6 +1,7 @@
 /** What a student has shown before in one series, at whatever checkpoint: to lay beside the photo in hand. */
 import { QueryTypes } from 'sequelize';
 import { sequelize } from '#server/db/sequelize.ts';
+import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
 
 export interface EarlierPhoto {
   readonly publicId: string;
@@ -16,7 +17,7 @@ export interface EarlierPhoto {
 export function earlierPhotos(enrolmentId: number, publicId: string, limit = 8): Promise<EarlierPhoto[]> {
   return sequelize.query<EarlierPhoto>(
     `SELECT p.public_id AS publicId, m.public_id AS mediaId, m.width, m.height, p.created_at AS postedAt, p.verdict,
-            (SELECT COUNT(*) FROM lessons b WHERE b.series_id = l.series_id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber
+            ${PART_NUMBER} AS partNumber
        FROM progress_photos p
        JOIN progress_photos shown ON shown.public_id = :publicId
        JOIN media m ON m.id = p.media_id

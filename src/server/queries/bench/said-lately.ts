@@ -3,6 +3,7 @@ import { QueryTypes } from 'sequelize';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { workroomsOf } from '#server/policies/workroom.ts';
+import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
 
 export interface HeldOne {
   /** Public id of the photo. */
@@ -44,7 +45,7 @@ export async function answeredLately(actor: Actor, limit = 6): Promise<AnsweredO
   if (workrooms.length === 0) return [];
   const rows = await sequelize.query<Omit<AnsweredOne, 'byHelper'> & { byHelper: number }>(
     `SELECT p.public_id AS photo, m.public_id AS mediaId, u.name AS studentName, s.slug AS seriesSlug, p.verdict, p.verdict_at AS answeredAt,
-            (SELECT COUNT(*) FROM lessons b WHERE b.series_id = s.id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber,
+            ${PART_NUMBER} AS partNumber,
             b.name AS \`by\`, b.id <> w.owner_id AS byHelper
        FROM progress_photos p
        JOIN media m ON m.id = p.media_id

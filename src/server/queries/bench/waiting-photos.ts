@@ -8,6 +8,7 @@ import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { workroomsOf } from '#server/policies/workroom.ts';
 import type { MediaFiles } from '#contracts/media.ts';
+import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
 
 export interface WaitingPhoto {
   readonly publicId: string;
@@ -38,7 +39,7 @@ const SELECT = `
          u.name AS studentName, u.units AS studentUnits, e.id AS enrolmentId,
          s.id AS seriesId, s.slug AS seriesSlug, s.title AS seriesTitle,
          l.id AS lessonId, l.title AS partTitle, l.checkpoint,
-         (SELECT COUNT(*) FROM lessons b WHERE b.series_id = s.id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber,
+         ${PART_NUMBER} AS partNumber,
          mp.data AS mine, w.id AS workroomId, w.answer_days AS answerDays
     FROM progress_photos p
     JOIN media m ON m.id = p.media_id

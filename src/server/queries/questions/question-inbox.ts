@@ -4,6 +4,7 @@ import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { workroomsOf } from '#server/policies/workroom.ts';
+import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
 import { QUESTION_COLUMNS, standsFor, withAnswers, type QuestionRow, type ShownQuestion } from './shown-questions.ts';
 
 export interface InboxQuestion extends ShownQuestion {
@@ -40,7 +41,7 @@ const WAITS = `s.workroom_id IN (:workrooms) AND q.answered_at IS NULL AND e.sta
 
 const SELECT = `
   SELECT ${QUESTION_COLUMNS}, s.title AS seriesTitle, s.slug AS seriesSlug, l.title AS partTitle,
-         (SELECT COUNT(*) FROM lessons b WHERE b.series_id = s.id AND b.taken_out_at IS NULL AND (b.position, b.id) <= (l.position, l.id)) AS partNumber,
+         ${PART_NUMBER} AS partNumber,
          JSON_EXTRACT(v.facts, '$.steps') AS steps
   ${FROM}
     LEFT JOIN lesson_versions v ON v.id = l.published_version_id`;
