@@ -1,8 +1,10 @@
 import { CalendarForm, FinishForm, GatheredForm, ReadForm } from '#contracts/following.ts';
 import { MyPieceForm } from '#contracts/my-piece.ts';
+import { RowsForm } from '#contracts/rows.ts';
 import { TickInput } from '#contracts/ticks.ts';
 import { stepAnchor } from '#core/lesson-text/tree.ts';
 import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
+import { sayRows } from '#server/use-cases/progress/count-rows.ts';
 import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
 import { readAnew } from '#server/use-cases/progress/note-reading.ts';
@@ -20,6 +22,11 @@ export const following = {
   gathered: formAction(GatheredForm, async (input, ctx, api) => {
     const count = await keepGathered(ctx, input);
     return { to: `${api.url.pathname}#gather`, said: count === 0 ? 'Nothing had changed.' : 'Your ticks are kept.' };
+  }),
+
+  rows: formAction(RowsForm, async (input, ctx) => {
+    await sayRows(ctx, input);
+    return { to: `/series/${input.series}/${input.part}/loomside?step=${input.step}#rows` };
   }),
 
   finish: formAction(FinishForm, async (input, ctx) => {

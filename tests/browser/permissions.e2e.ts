@@ -42,6 +42,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
   '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
+  '/api/rows': [{ at: '/api/rows', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/ticks': [{ at: '/api/ticks', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/video-place': [{ at: '/api/video-place', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/videos/[...upload]': [{ at: '/api/videos', post: true, answers: '401 403 403 412 412 403 403' }],

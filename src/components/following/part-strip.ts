@@ -4,7 +4,8 @@ import { spreadOverParts, type PartStretch } from '#core/craft/cloth/parts-strip
 import { wovenOf } from '#core/craft/cloth-of.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
 import { stretchesOf } from '#core/following/bands-by-part.ts';
-import { howFar } from '#core/following/progress.ts';
+import { countedShare } from '#core/following/counted-bands.ts';
+import { fellOf } from '#core/following/progress.ts';
 import type { FollowedSeries } from '#server/queries/following/followed-series.ts';
 
 export interface PartStrip {
@@ -14,12 +15,11 @@ export interface PartStrip {
 }
 
 /** Null for a series whose piece cannot be drawn. Without a seat all of it is shown woven. */
-export function partStrip({ series, progress, amountKeys }: FollowedSeries, made: MadeFor | null): PartStrip | null {
+export function partStrip({ series, pieces, progress, amountKeys, counts }: FollowedSeries, made: MadeFor | null): PartStrip | null {
   if (made === null) return null;
   const piece = wovenOf(made.piece, made.plan, series.title);
-  return piece && {
-    piece,
-    parts: stretchesOf(made.piece, amountKeys) ?? spreadOverParts(piece, series.parts.length),
-    done: series.seat === null ? series.parts.length : howFar(progress).done,
-  };
+  if (piece === null) return null;
+  const parts = stretchesOf(made.piece, amountKeys) ?? spreadOverParts(piece, series.parts.length);
+  const heights = piece.bands.map(({ heightMm }) => heightMm);
+  return { piece, parts, done: series.seat === null ? series.parts.length : fellOf(progress, parts, heights, countedShare(made, counts, pieces.woven)).done };
 }

@@ -4,7 +4,8 @@ import { spreadOverParts, type PartStretch } from '#core/craft/cloth/parts-strip
 import { clothOf } from '#core/craft/cloth-of.ts';
 import { madeFor, type MadeFor } from '#core/craft/made-for.ts';
 import { stretchesOf } from '#core/following/bands-by-part.ts';
-import { howFar, wovenShare, type HowFar } from '#core/following/progress.ts';
+import { countedShare } from '#core/following/counted-bands.ts';
+import { fellOf, howFar, type HowFar } from '#core/following/progress.ts';
 import { titleHalves } from '#core/series/title.ts';
 import type { Units } from '#core/units/units.ts';
 import type { SeatOnLoom } from '#server/queries/loom/my-loom.ts';
@@ -27,7 +28,8 @@ export function clothOnLoom(seat: SeatOnLoom, units: Units): ClothOnLoom {
   if (made === null || piece?.kind !== 'woven') return { made, far, piece, woven: far.inHand === undefined ? 1 : 0, stretches: [] };
   const stretches = stretchesOf(made.piece, seat.parts.map(({ amountKeys }) => amountKeys)) ?? spreadOverParts(piece, seat.parts.length);
   const heights = piece.bands.map(({ heightMm }) => heightMm);
-  return { made, far, piece, stretches, woven: far.inHand === undefined ? 1 : wovenShare(far.done, stretches, heights) };
+  const { share: woven, ...fell } = fellOf(seat.parts, stretches, heights, countedShare(made, seat.counts, seat.woven));
+  return { made, far: fell, piece, stretches, woven };
 }
 
 export interface LoomMark {

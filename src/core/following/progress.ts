@@ -36,10 +36,13 @@ export function stepsDone({ steps, ticked }: Pick<PartInHand, 'steps' | 'ticked'
   return steps.filter((id) => ticked.has(id)).length;
 }
 
+/** A part in hand is never shown as whole: the last look is missing. */
+const MOST_IN_HAND = 0.96;
+
 /** 0 to 1: of a part in hand, the share of its steps. All steps ticked is not yet done: the last look is missing. */
 export function shareOf(part: PartInHand): number {
   if (isDone(part)) return 1;
-  return part.steps.length === 0 ? 0 : Math.min(0.96, stepsDone(part) / part.steps.length);
+  return part.steps.length === 0 ? 0 : Math.min(MOST_IN_HAND, stepsDone(part) / part.steps.length);
 }
 
 export interface HowFar {
@@ -67,4 +70,27 @@ export function wovenShare(done: number, stretches: readonly PartStretch[], heig
     return sum + high * Math.min(1, Math.max(0, done - part));
   }, 0);
   return Math.min(1, woven / total);
+}
+
+export interface Fell extends HowFar {
+  /** Of the woven height, 0 to 1. */
+  readonly share: number;
+}
+
+/**
+ * Where the fell is. Parts that are done count whole, whatever was counted. In the part in hand the rows she counted say
+ * how far she is and, while she counts none, the steps she ticked; with every step ticked, the further of both.
+ * @param counted share of the woven height that was counted, 0 to 1
+ */
+export function fellOf(parts: readonly PartInHand[], stretches: readonly PartStretch[], heights: readonly number[], counted: number): Fell {
+  const far = howFar(parts);
+  const { inHand } = far;
+  if (inHand === undefined) return { ...far, share: 1 };
+  const at = parts.indexOf(inHand);
+  const floor = wovenShare(at, stretches, heights);
+  const ticked = wovenShare(far.done, stretches, heights);
+  if (counted <= floor) return { ...far, share: ticked };
+  const share = stepsDone(inHand) === inHand.steps.length ? Math.max(counted, ticked) : counted;
+  const own = wovenShare(at + 1, stretches, heights) - floor;
+  return { inHand, share, done: own === 0 ? far.done : at + Math.min(MOST_IN_HAND, (share - floor) / own) };
 }

@@ -30,6 +30,7 @@ export { Question } from './question.ts';
 export { QuestionAnswer } from './question-answer.ts';
 export { RefusedAddress } from './refused-address.ts';
 export { Review } from './review.ts';
+export { RowTally } from './row-tally.ts';
 export { Series } from './series.ts';
 export { SeriesMedia } from './series-media.ts';
 export { Session } from './session.ts';

@@ -31,6 +31,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/photos': 'signed-in',
   '/api/openapi.json': 'machine',
   '/api/reckon': 'machine',
+  '/api/rows': 'signed-in',
   '/api/ticks': 'signed-in',
   '/api/video-place': 'signed-in',
   '/api/videos/[...upload]': 'teacher',

@@ -1,9 +1,11 @@
 /** A series as one person follows it: its parts, her piece, and how far she is. */
 import { QueryTypes } from 'sequelize';
 import type { PartInHand } from '#core/following/progress.ts';
+import type { RowCounts } from '#core/following/row-count.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
+import { rowCounts } from '#server/queries/following/row-counts.ts';
 import { piecesOf, type PiecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { seriesFor, type PartFor, type SeriesFor } from '#server/queries/series/series-for.ts';
 
@@ -14,6 +16,8 @@ export interface FollowedSeries {
   readonly progress: readonly PartInHand[];
   /** Keys of the amounts each part's text speaks of, in the order of the parts. */
   readonly amountKeys: readonly (readonly string[])[];
+  /** Rows she counted at the loom. */
+  readonly counts: RowCounts;
 }
 
 interface FactsRow { readonly lessonId: number; readonly facts: LessonFacts }
@@ -23,7 +27,7 @@ interface TickRow { readonly itemKey: string }
 export async function followedSeries(actor: Actor | null, slug: string, now: Date): Promise<FollowedSeries | null> {
   const series = await seriesFor(actor, slug, now);
   if (series === null) return null;
-  const [pieces, facts, ticks] = await Promise.all([
+  const [pieces, facts, ticks, counts] = await Promise.all([
     piecesOf(series.id, series.seat?.enrolmentId ?? null),
     sequelize.query<FactsRow>(
       `SELECT l.id AS lessonId, v.facts FROM lessons l JOIN lesson_versions v ON v.id = l.published_version_id
@@ -34,11 +38,13 @@ export async function followedSeries(actor: Actor | null, slug: string, now: Dat
       `SELECT item_key AS itemKey FROM ticks WHERE enrolment_id = ? AND subject = 'step' AND is_ticked = 1`,
       { replacements: [series.seat.enrolmentId], type: QueryTypes.SELECT },
     ),
+    series.seat === null ? {} : rowCounts(series.seat.enrolmentId),
   ]);
   const factsOf = ({ id }: PartFor): LessonFacts | undefined => facts.find(({ lessonId }) => lessonId === id)?.facts;
   return {
     series,
     pieces,
+    counts,
     progress: series.parts.map((part) => partInHand(part, factsOf(part), ticks)),
     amountKeys: series.parts.map((part) => factsOf(part)?.amounts ?? []),
   };

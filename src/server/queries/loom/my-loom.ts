@@ -1,13 +1,16 @@
-/** Everything on one person's loom: her seats with how far she is in each, and what she paid. Four statements. */
+/** Everything on one person's loom: her seats with how far she is in each, and what she paid. Five statements. */
 import { QueryTypes } from 'sequelize';
 import type { MyPiece } from '#core/craft/fit.ts';
 import type { CraftName, Piece } from '#core/craft/crafts.ts';
+import { NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import type { PartInHand, Verdict } from '#core/following/progress.ts';
+import type { RowCounts } from '#core/following/row-count.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { standingOf, type OpeningRule, type Standing } from '#core/timetable/opening.ts';
 import type { Checkpoint } from '#contracts/lesson.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
+import { rowCountsOf } from '#server/queries/following/row-counts.ts';
 
 export interface PartOnLoom extends PartInHand {
   readonly id: number;
@@ -33,6 +36,10 @@ export interface SeatOnLoom {
   readonly startedAt: Date;
   readonly pattern: Piece | null;
   readonly mine: MyPiece;
+  /** As she said in *My piece*. */
+  readonly woven: WovenSoFar;
+  /** Rows she counted at the loom. */
+  readonly counts: RowCounts;
   readonly parts: readonly PartOnLoom[];
   /** Parts behind those that are published: still being written. */
   readonly partsToCome: number;
@@ -57,7 +64,7 @@ export interface MyLoom {
   readonly orders: readonly PaidOrder[];
 }
 
-interface SeatRow extends Omit<SeatOnLoom, 'parts' | 'mine'> { readonly seriesId: number; readonly mine: MyPiece | null }
+interface SeatRow extends Omit<SeatOnLoom, 'parts' | 'mine' | 'woven' | 'counts'> { readonly seriesId: number; readonly mine: MyPiece | null; readonly woven: WovenSoFar | null }
 
 interface PartRow {
   readonly enrolmentId: number; readonly id: number; readonly publicId: string; readonly title: string; readonly minutes: number;
@@ -69,7 +76,7 @@ const SEATS = `
   SELECT e.id AS enrolmentId, e.public_id AS publicId, e.started_at AS startedAt, s.id AS seriesId, s.slug, s.title, s.craft,
          (SELECT COUNT(*) FROM lessons l WHERE l.series_id = s.id AND l.taken_out_at IS NULL AND l.published_version_id IS NULL
              AND l.position > COALESCE((SELECT MAX(o.position) FROM lessons o WHERE o.series_id = s.id AND o.taken_out_at IS NULL AND o.published_version_id IS NOT NULL), 0)) AS partsToCome,
-         u.name AS teacherName, w.answer_days AS answerDays, p.data AS pattern, m.data AS mine
+         u.name AS teacherName, w.answer_days AS answerDays, p.data AS pattern, m.data AS mine, m.woven
     FROM enrolments e
     JOIN series s ON s.id = e.series_id
     JOIN workrooms w ON w.id = s.workroom_id
@@ -77,7 +84,7 @@ const SEATS = `
     LEFT JOIN pieces p ON p.series_id = s.id
     LEFT JOIN my_pieces m ON m.enrolment_id = e.id
    WHERE e.user_id = :userId AND e.state = 'active'
-   ORDER BY COALESCE((SELECT MAX(t.changed_at) FROM ticks t WHERE t.enrolment_id = e.id), e.started_at) DESC, e.id DESC`;
+   ORDER BY GREATEST(COALESCE((SELECT MAX(t.changed_at) FROM ticks t WHERE t.enrolment_id = e.id), e.started_at), COALESCE((SELECT MAX(r.updated_at) FROM row_tallies r WHERE r.enrolment_id = e.id), e.started_at)) DESC, e.id DESC`;
 
 const PARTS = `
   SELECT e.id AS enrolmentId, l.id, l.public_id AS publicId, l.title, l.minutes, l.opens, l.checkpoint, l.published_version_id AS publishedVersionId, v.facts,
@@ -106,21 +113,22 @@ export async function myLoom(actor: Actor, now: Date): Promise<MyLoom> {
   ]);
   if (seats.length === 0) return { seats: [], orders };
   const enrolmentIds = seats.map(({ enrolmentId }) => enrolmentId);
-  const [parts, ticks] = await Promise.all([
+  const [parts, ticks, counts] = await Promise.all([
     sequelize.query<PartRow>(PARTS, { replacements: { enrolmentIds }, type: QueryTypes.SELECT }),
     sequelize.query<{ enrolmentId: number; itemKey: string }>(
       `SELECT enrolment_id AS enrolmentId, item_key AS itemKey FROM ticks WHERE enrolment_id IN (:enrolmentIds) AND subject = 'step' AND is_ticked = 1`,
       { replacements: { enrolmentIds }, type: QueryTypes.SELECT },
     ),
+    rowCountsOf(enrolmentIds),
   ]);
   return {
     orders,
-    seats: seats.map(({ seriesId: _seriesId, mine, ...seat }) => {
+    seats: seats.map(({ seriesId: _seriesId, mine, woven, ...seat }) => {
       const own = parts.filter(({ enrolmentId }) => enrolmentId === seat.enrolmentId);
       const keys = ticks.filter(({ enrolmentId }) => enrolmentId === seat.enrolmentId).map(({ itemKey }) => itemKey);
       const wovenOn = new Set(own.filter((part) => part.wovenOn === 1).map(({ publicId }) => publicId));
       const done = new Set(own.filter((part) => part.wovenOn === 1 || part.finishedAt !== null).map(({ publicId }) => publicId));
-      return { ...seat, mine: mine ?? {}, parts: own.map((part, index) => partOnLoom(part, index + 1, keys, standingOf(part.opens, { seatStartedAt: seat.startedAt, wovenOn, done, now }))) };
+      return { ...seat, mine: mine ?? {}, woven: woven ?? NOTHING_WOVEN, counts: counts.get(seat.enrolmentId) ?? {}, parts: own.map((part, index) => partOnLoom(part, index + 1, keys, standingOf(part.opens, { seatStartedAt: seat.startedAt, wovenOn, done, now }))) };
     }),
   };
 }
