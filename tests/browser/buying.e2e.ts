@@ -3,7 +3,7 @@ import { expect, type Page } from 'playwright/test';
 import { letterTo } from './support/mail-tray.ts';
 import { newPerson, signInHere } from './support/new-person.ts';
 import { CARD, payWith, REFUSED_CARD, untilSeat } from './support/pay.ts';
-import { expectFaultless, test } from './support/test.ts';
+import { test } from './support/test.ts';
 
 const takeSeat = (page: Page): Promise<void> => page.getByRole('button', { name: 'Take a seat' }).click();
 
@@ -91,21 +91,3 @@ test('who has not confirmed her address is told so, and sent to nobody', async (
   await expect(page.getByText('Confirm your address first: the receipt goes there. The link is in your mail.')).toBeVisible();
   await expect(page.getByLabel(/^I know that with the first part/)).toBeChecked();
 });
-
-for (const { width, colorScheme } of [{ width: 1280, colorScheme: 'light' }, { width: 1280, colorScheme: 'dark' }, { width: 390, colorScheme: 'light' }, { width: 390, colorScheme: 'dark' }] as const) {
-  test.describe(`at ${width} px, ${colorScheme}`, () => {
-    test.use({ viewport: { width, height: 900 }, colorScheme });
-
-    test('the pages of the shop are without fault', async ({ page }) => {
-      for (const address of ['/', '/series', '/series?q=nothing+like+it', '/series/low-tide', '/series/low-tide?inside=abc&spacing=8&paying=stopped', '/teachers/saltmarsh']) {
-        await page.goto(address);
-        await expectFaultless(page);
-      }
-      await page.goto('/series/low-tide?inside=14&spacing=5%2F16&ends=2&units=in&wide=most#try');
-      await expect(page.getByRole('button', { name: 'Reckon for this loom' })).toHaveCount(0);
-      await page.getByText('See every number').click();
-      await page.getByText('What can stand in for what').click();
-      await expectFaultless(page);
-    });
-  });
-}

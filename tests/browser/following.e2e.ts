@@ -203,17 +203,3 @@ test('a film is not handed to whoever has no seat', async ({ browser, request })
   await maud.close();
   expect((await request.get(src)).status()).toBe(404);
 });
-
-for (const { width, colorScheme } of [{ width: 1280, colorScheme: 'light' }, { width: 1280, colorScheme: 'dark' }, { width: 390, colorScheme: 'light' }, { width: 390, colorScheme: 'dark' }] as const) {
-  test.describe(`at ${width} px, ${colorScheme}`, () => {
-    test.use({ viewport: { width, height: 900 }, colorScheme, storageState: stateOf('jonas') });
-
-    test('the pages of following are without fault', async ({ page }) => {
-      test.setTimeout(120_000);
-      for (const address of ['/loom', '/series/low-tide/1', '/series/low-tide/2', '/series/low-tide/2/loomside?step=1', '/series/low-tide/gather', '/series/low-tide/gather?part=3&show=open', '/series/low-tide/piece', '/series/low-tide/5']) {
-        await page.goto(address);
-        await expectFaultless(page);
-      }
-    });
-  });
-}

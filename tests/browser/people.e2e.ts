@@ -1,7 +1,7 @@
 import { randomBytes } from 'node:crypto';
 import { expect, type Page } from 'playwright/test';
 import { letterTo, linkIn } from './support/mail-tray.ts';
-import { expectFaultless, test } from './support/test.ts';
+import { test } from './support/test.ts';
 
 const DEMO_PASSWORD = process.env['FELLMARK_TEST_PASSWORD'] ?? '';
 const FIRST = 'nine kettles on a beam';
@@ -162,28 +162,3 @@ test('the office is not there for anybody else', async ({ page }) => {
   await signIn(page, 'amara@weavers.example', DEMO_PASSWORD);
   for (const path of ['/office', '/office/people', '/office/mail', '/office/jobs', '/office/log']) expect((await page.goto(path))?.status()).toBe(404);
 });
-
-for (const colorScheme of ['light', 'dark'] as const) {
-  for (const width of [1280, 390]) {
-    test(`the pages of people and office are faultless at ${width} px, ${colorScheme}`, async ({ page }) => {
-      await page.emulateMedia({ colorScheme });
-      await page.setViewportSize({ width, height: 844 });
-      for (const path of ['/sign-in', '/sign-up', '/forgotten', '/confirm/x', '/new-password/x']) {
-        await page.goto(path);
-        await expectFaultless(page);
-      }
-      await page.goto('/sign-up');
-      await press(page, 'Make my account');
-      await expect(page.getByRole('heading', { name: '3 things do not work yet' })).toBeVisible();
-      await expectFaultless(page);
-      await signIn(page, 'pell@office.example', DEMO_PASSWORD);
-      for (const path of ['/account', '/prove', '/office', '/office/people', '/office/people?q=nobody-of-this-name', '/office/mail', '/office/jobs', '/office/log']) {
-        await page.goto(path);
-        await expectFaultless(page);
-      }
-      await page.goto('/office/people?q=amara');
-      await page.getByRole('link', { name: 'Amara Voss' }).click();
-      await expectFaultless(page);
-    });
-  }
-}

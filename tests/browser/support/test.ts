@@ -21,19 +21,38 @@ export const test = base.extend({
 });
 
 const NARROWEST = 320;
+/** What a scheme changes is colour; everything else is the same by day and by evening. */
+const RULES_OF_COLOUR = ['color-contrast', 'link-in-text-block'];
 
 /** Nothing that a program can find stands between the page and those who hear or zoom it; it never scrolls sideways, nor at 320 px. */
 export async function expectFaultless(page: Page): Promise<void> {
   await page.evaluate(() => document.fonts.ready.then(() => undefined));
-  await page.evaluate(axe.source);
-  const found = await page.evaluate(async () => (await window.axe.run(document, { resultTypes: ['violations'] })).violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`));
-  expect(found, page.url()).toEqual([]);
+  await expectNoFaultOf(page, { rules: { 'target-size': { enabled: true } } });
   await expectNoSidewaysScroll(page);
   const size = page.viewportSize();
   if (size === null || size.width > 520) return;
   await page.setViewportSize({ ...size, width: NARROWEST });
   await expectNoSidewaysScroll(page);
   await page.setViewportSize(size);
+}
+
+/** The same wide and on a phone, by day and by evening; the page is left on a phone by evening. */
+export async function expectFaultlessEverywhere(page: Page): Promise<void> {
+  /* Colours that are on their way from one scheme to the other are neither's. */
+  await page.emulateMedia({ reducedMotion: 'reduce' });
+  for (const width of [1280, 390]) {
+    await page.setViewportSize({ width, height: 900 });
+    await page.emulateMedia({ colorScheme: 'light' });
+    await expectFaultless(page);
+    await page.emulateMedia({ colorScheme: 'dark' });
+    await expectNoFaultOf(page, { runOnly: RULES_OF_COLOUR });
+  }
+}
+
+async function expectNoFaultOf(page: Page, options: axe.RunOptions): Promise<void> {
+  if (!(await page.evaluate(() => 'axe' in window))) await page.evaluate(axe.source);
+  const found = await page.evaluate(async (asked) => (await window.axe.run(document, { ...asked, resultTypes: ['violations'] })).violations.map(({ id, nodes }) => `${id}: ${nodes.map(({ html }) => html).join(' ')}`), options);
+  expect(found, page.url()).toEqual([]);
 }
 
 async function expectNoSidewaysScroll(page: Page): Promise<void> {
