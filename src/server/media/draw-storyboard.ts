@@ -107,10 +107,16 @@ async function encode(frameAt: (atMs: number) => Promise<Buffer>, durationMs: nu
 /** Every frame in order. The next one is being drawn while its forerunner is encoded. */
 async function* framesOf(frameAt: (atMs: number) => Promise<Buffer>, durationMs: number): AsyncGenerator<Buffer> {
   const count = Math.ceil((durationMs / 1000) * FRAMES_PER_SECOND);
-  let next = frameAt(0);
+  const begin = (atMs: number): Promise<Buffer> => {
+    const drawing = frameAt(atMs);
+    /* The encoder may have had enough while one is drawn; what was drawn for nobody may fail unheard. */
+    drawing.catch(() => undefined);
+    return drawing;
+  };
+  let next = begin(0);
   for (let frame = 1; frame <= count; frame++) {
     const pixels = await next;
-    if (frame < count) next = frameAt((frame * 1000) / FRAMES_PER_SECOND);
+    if (frame < count) next = begin((frame * 1000) / FRAMES_PER_SECOND);
     yield pixels;
   }
 }
