@@ -1,10 +1,8 @@
 // Puts a scene together from what a page has fetched: a piece with its plan, the media of the series, the ticks.
 import { sizeWords } from '#core/video/limits.ts';
 import type { SeriesMediaFile } from '#contracts/media.ts';
-import { amountOf } from '#core/craft/amounts.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
-import type { Piece } from '#core/craft/crafts.ts';
-import type { Plan } from '#core/craft/crafts.ts';
+import { amountFor, type MadeSoFar } from '#core/craft/rest/amount-for.ts';
 import type { LessonFacts } from '#core/lesson-text/lesson-facts.ts';
 import { formatAmount } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -13,7 +11,7 @@ import { sceneEntry, type LessonScene, type SceneAmount, type SceneFigure, type 
 export interface SceneSources {
   readonly facts: LessonFacts;
   /** The person's piece, or the pattern piece; absent while a series has none. */
-  readonly piece?: { readonly piece: Piece; readonly plan: Plan };
+  readonly made?: MadeSoFar;
   readonly units: Units;
   readonly media: readonly SeriesMediaFile[];
   /** Where she stopped in videos, by their names. */
@@ -28,7 +26,7 @@ export function sceneOf(sources: SceneSources): LessonScene {
   return {
     amounts: amountsOf(sources),
     figures: figuresOf(sources),
-    ...(facts.figures.length > 0 && sources.piece !== undefined && { figuresOf: { piece: sources.piece.piece, plan: sources.piece.plan, units: sources.units } }),
+    ...(facts.figures.length > 0 && sources.made !== undefined && { figuresOf: { piece: sources.made.piece, plan: sources.made.plan, units: sources.units } }),
     pictures: entries(namesOf(facts, 'picture'), (name) => pictureOf(mediaNamed(sources, 'picture', name))),
     videos: entries(namesOf(facts, 'video'), (name) => videoOf(mediaNamed(sources, 'video', name), sceneEntry(sources.places ?? {}, name))),
     ticked: new Set(ticked),
@@ -36,10 +34,10 @@ export function sceneOf(sources: SceneSources): LessonScene {
   };
 }
 
-function amountsOf({ facts, piece: of, units }: SceneSources): Record<string, SceneAmount> {
-  if (of === undefined) return {};
+function amountsOf({ facts, made, units }: SceneSources): Record<string, SceneAmount> {
+  if (made === undefined) return {};
   return entries(facts.amounts, (key) => {
-    const amount = amountOf(key, of.piece, of.plan);
+    const amount = amountFor(key, made);
     if (!amount.ok) return undefined;
     const { label, howReckoned } = amount.value;
     const inputs = howReckoned.inputs.map(({ name, value }) => ({ name, parts: formatAmount(value, units) }));
@@ -47,9 +45,9 @@ function amountsOf({ facts, piece: of, units }: SceneSources): Record<string, Sc
   });
 }
 
-function figuresOf({ facts, piece: of, units }: SceneSources): Record<string, SceneFigure> {
-  if (of === undefined) return {};
-  return entries(facts.figures, (kind) => ({ svg: drawFigure(kind, { ...of, units }) }));
+function figuresOf({ facts, made, units }: SceneSources): Record<string, SceneFigure> {
+  if (made === undefined) return {};
+  return entries(facts.figures, (kind) => ({ svg: drawFigure(kind, { piece: made.piece, plan: made.plan, units }) }));
 }
 
 function entries<T, K extends string>(names: readonly K[], find: (name: K) => T | undefined): Record<string, T> {

@@ -21,7 +21,7 @@ export interface ClothOnLoom {
 }
 
 export function clothOnLoom(seat: SeatOnLoom, units: Units): ClothOnLoom {
-  const made = madeFor(seat.pattern, seat.mine, units);
+  const made = madeFor(seat.pattern, seat.mine, units, seat.woven);
   const far = howFar(seat.parts);
   const { name } = titleHalves(seat.title);
   const piece = made && clothOf(made.piece, made.plan, name);

@@ -1,10 +1,10 @@
 /** Lines of a gathering list with a student's own amounts, ready to be shown. */
 import { massOf } from '#core/craft/amounts/amount-types.ts';
-import { amountOf } from '#core/craft/amounts.ts';
 import type { Material } from '#core/craft/craft.ts';
 import { craftOf, type Piece } from '#core/craft/crafts.ts';
 import type { MadeFor } from '#core/craft/made-for.ts';
 import type { Yarn } from '#core/craft/piece.ts';
+import { amountToHave, materialsToHave, type UsedUp } from '#core/craft/rest/amount-for.ts';
 import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
 import { partsList } from '#core/series/parts-list.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
@@ -61,7 +61,7 @@ export function roleOfKey(key: string | null, piece: Piece | null): string | und
   return key === null || piece === null ? undefined : craftOf(piece).roleOfKey(key, piece);
 }
 
-const materialsOf = (made: MadeFor | null): readonly Material[] => (made === null ? [] : craftOf(made.piece).materials(made));
+const materialsOf = (made: MadeFor | null): readonly Material[] => (made === null ? [] : materialsToHave(made));
 
 /**
  * A part may ask for the yarn of one band, or for what is left of a yarn; in the list of the whole series that is
@@ -121,14 +121,18 @@ function ownName(name: string, yarn: Yarn | undefined, pattern: Yarn | undefined
   return isOwnYarn(yarn, pattern) ? `${yarn?.label ?? 'Your own yarn'} (for ${name})` : name;
 }
 
+/** Half way, in the place of an amount. */
+const USED_UP: Readonly<Record<UsedUp, string>> = { woven: 'Woven', 'on-loom': 'On the loom' };
+
 function amountIn({ amountKey, amountText: words }: MergedLine, made: MadeFor | null, units: Units): ShownLine['amount'] {
   if (amountKey === null || made === null) return words;
-  const amount = amountOf(amountKey, made.piece, made.plan);
+  const amount = amountToHave(amountKey, made);
+  if (typeof amount === 'string') return USED_UP[amount];
   return amount.ok ? formatAmount(amount.value, units) : words;
 }
 
 function weightWords({ amountKey }: MergedLine, material: Material | undefined, units: Units): string {
-  if (material === undefined || amountKey === null || amountKey.startsWith('band.')) return '';
+  if (material === undefined || material.grams === 0 || amountKey === null || amountKey.startsWith('band.')) return '';
   const weight = amountText(massOf(material.grams), units);
   return material.balls === undefined ? weight : `${weight}, ${material.balls === 1 ? '1 ball' : `${material.balls} balls`}`;
 }

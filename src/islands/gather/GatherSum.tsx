@@ -10,6 +10,8 @@ export interface GatherSumProps {
   amount: string | null;
   /** What the amounts are reckoned for: a loom where the craft has one, else the piece; null when nothing can be reckoned. */
   made: string | null;
+  /** For what of the piece they are, once some of it is woven; empty before. */
+  rest: string;
   hasLoom: boolean;
   /** Whose it is: the reader's or the pattern's. */
   isOwn: boolean;
@@ -20,7 +22,7 @@ export interface GatherSumProps {
 }
 
 /** What is still to get, how much yarn that is in all, and for which loom it is reckoned. */
-export function GatherSum({ left, total, material, amount, made, hasLoom, isOwn, pieceHref, seriesHref }: GatherSumProps) {
+export function GatherSum({ left, total, material, amount, made, rest, hasLoom, isOwn, pieceHref, seriesHref }: GatherSumProps) {
   const [canPrint, setCanPrint] = useState(false);
   useEffect(() => setCanPrint(true), []);
   return (
@@ -35,6 +37,7 @@ export function GatherSum({ left, total, material, amount, made, hasLoom, isOwn,
       </div>
       <div className="long stack stack-tight small">
         {made !== null && <p>Amounts are for {isOwn ? <><b>your</b> {hasLoom ? 'loom' : 'piece'}</> : hasLoom ? 'the pattern’s loom' : 'the pattern'}: {made}. They hold a margin{hasLoom && ' for knots, tails and take-up'}.</p>}
+        {rest !== '' && <p>{rest}</p>}
         {pieceHref !== null && <p><a href={pieceHref}>{isOwn ? 'Change' : 'Tell it'} my {hasLoom ? 'loom and yarn' : 'piece'}</a></p>}
         {seriesHref !== null && <p>With a seat every amount is reckoned for your own {hasLoom ? 'loom' : 'piece'}, and your ticks are kept. <a href={seriesHref}>See the series</a></p>}
       </div>

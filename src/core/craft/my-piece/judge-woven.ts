@@ -3,6 +3,7 @@ import type { MyPiece } from '#core/craft/fit.ts';
 import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import type { Made } from '#core/craft/fitting/tell-changes.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
+import type { HalfWoven } from '#core/craft/rest/as-it-comes-out.ts';
 import { refuseChanges } from '#core/craft/rest/fixed-on-loom.ts';
 import { planRest, type RestPlan } from '#core/craft/rest/plan-rest.ts';
 import { isBegun, NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
@@ -18,9 +19,7 @@ export interface KeptPiece {
 
 export const NOTHING_KEPT: KeptPiece = { mine: {}, woven: NOTHING_WOVEN };
 
-export interface Halfway {
-  readonly woven: WovenSoFar;
-  readonly rest: RestPlan;
+export interface Halfway extends HalfWoven {
   /** Only those of the rest, with paths in what is woven. */
   readonly warnings: readonly Problem[];
   /** The rest of the piece as it was kept, where that was begun and is changed now; what is woven is the same for both. */

@@ -9,6 +9,8 @@ import { ballsFor } from '#core/craft/purchase.ts';
 import { Fields } from '#core/craft/reading/fields.ts';
 import { below, Findings } from '#core/craft/reading/findings.ts';
 import { present } from '#core/craft/reading/present.ts';
+import { asItComesOut, planOfRest } from '#core/craft/rest/as-it-comes-out.ts';
+import { NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import { roundUpTo } from '#core/craft/rounding.ts';
 import { gristOf } from '#core/craft/yarn/thread.ts';
 import { fail, type Outcome, type Problem } from '#core/outcome.ts';
@@ -55,6 +57,8 @@ export interface Shopping {
 export interface PieceToShop {
   readonly name: string;
   readonly piece: unknown;
+  /** How far it is woven: only what is still to weave is shopped for then. */
+  readonly woven?: WovenSoFar;
 }
 
 interface Planned {
@@ -86,7 +90,7 @@ function wantedIn({ name, piece, plan }: Planned): Wanted[] {
     const own = plan.yarns[role];
     return own === undefined || own.netMm === 0 ? [] : [{ key: keyOf(yarn, false, `${name} ${role}`), yarn, name: yarn.label ?? role, isWarp: false, plan: own, piece: name }];
   });
-  return [warp, ...wefts];
+  return [...(plan.warp.netMm === 0 ? [] : [warp]), ...wefts];
 }
 
 /** Of one yarn: at least one piece wants it. */
@@ -153,11 +157,18 @@ function mergeTools(pieces: readonly Planned[]): ShoppingTool[] {
   return TOOL_ORDER.flatMap((kind) => [...together.values()].filter((tool) => tool.kind === kind));
 }
 
+/** What was said of how far it is may not belong to the piece any more: then all of it is shopped for. */
+function stillToWeave(planned: Planned, woven: WovenSoFar, units: Units): Planned {
+  const comes = asItComesOut(planned, woven, units);
+  return !comes.ok || comes.value.halfway === null ? planned : { ...planned, plan: planOfRest(planned, comes.value.halfway) };
+}
+
 /** One piece with its plan; undefined, with problems, if it cannot be woven. Its warnings are told with its own plan. */
 function planOne(value: unknown, path: string, findings: Findings, problems: Problem[]): Planned | undefined {
   const fields = Fields.of(value, path, 'A piece to shop for', findings);
   const name = fields.text('name', { name: 'Name of the piece', maxLength: 200 });
   const piece = fields.take('piece');
+  const woven = (fields.take('woven') ?? NOTHING_WOVEN) as WovenSoFar;
   fields.end();
   // Only what is woven is merged as yet; the cords of other crafts are cut one by one.
   const craft = typeof piece === 'object' && piece !== null ? Reflect.get(piece, 'craft') as unknown : undefined;
@@ -166,7 +177,7 @@ function planOne(value: unknown, path: string, findings: Findings, problems: Pro
     return undefined;
   }
   const planned = planPiece(piece as FrameLoomPiece, findings.units);
-  if (planned.ok) return { name, piece: piece as FrameLoomPiece, plan: planned.value };
+  if (planned.ok) return stillToWeave({ name, piece: piece as FrameLoomPiece, plan: planned.value }, woven, findings.units);
   problems.push(...planned.problems.map((problem) => ({ ...problem, path: `${path}/piece${problem.path}` })));
   return undefined;
 }

@@ -18,7 +18,7 @@ const plan = planned.value;
 function sources(source: string, extra: Partial<SceneSources> = {}): SceneSources {
   const read = parseLessonText(source);
   if (!read.ok) throw new Error(read.problems[0]?.reason);
-  return { facts: factsOf(read.tree), piece: { piece, plan }, units: 'cm', media: [], ticked: [], ...extra };
+  return { facts: factsOf(read.tree), made: { piece, plan, halfway: null }, units: 'cm', media: [], ticked: [], ...extra };
 }
 
 const file = { key: 'x/y', contentType: 'video/mp4', byteCount: 1 };
@@ -48,7 +48,7 @@ describe('the scene of a lesson', () => {
   });
 
   test('holds no amounts and figures before the piece is described', () => {
-    const { piece: _none, ...rest } = sources('<Amount of="ends"/>\n\n<Figure of="tabby"/>');
+    const { made: _none, ...rest } = sources('<Amount of="ends"/>\n\n<Figure of="tabby"/>');
     expect(sceneOf(rest)).toMatchObject({ amounts: {}, figures: {} });
   });
 

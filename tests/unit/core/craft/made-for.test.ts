@@ -23,4 +23,17 @@ describe('the piece a page reckons with', () => {
     expect(madeFor(null, {}, 'cm')).toBeNull();
     expect(madeFor(pieceWith({ size: { widthMm: 300, heightMm: 5_000 } }) , {}, 'cm')).toBeNull();
   });
+
+  test('is half way with what she told of it; not where the pattern stands in for hers, nor where nothing is woven', () => {
+    const woven = { bandsDone: 0, rows: 100 };
+    expect(madeFor(PLAIN_PIECE, {}, 'cm', woven)?.halfway).toMatchObject({ woven, rest: { rows: 177 } });
+    expect(madeFor(PLAIN_PIECE, {}, 'cm')?.halfway).toBeNull();
+    expect(madeFor(PLAIN_PIECE, { loom: { insideHeightMm: 100 } }, 'cm', woven)?.halfway).toBeNull();
+  });
+
+  test('is whole, and says why, where what she told belongs to another piece', () => {
+    const made = madeFor(PLAIN_PIECE, {}, 'cm', { bandsDone: 9 });
+    expect(made).toMatchObject({ halfway: null, problems: [], plan: { ends: { count: 62 } } });
+    expect(made?.restProblems.map(({ path }) => path)).toEqual(['/bandsDone']);
+  });
 });

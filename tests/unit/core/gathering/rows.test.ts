@@ -1,11 +1,12 @@
 import { describe, expect, test } from 'vitest';
 import { madeFor } from '#core/craft/made-for.ts';
+import { NOTHING_WOVEN } from '#core/craft/rest/woven-so-far.ts';
 import type { GatheringLine } from '#core/gathering/merge.ts';
-import { gatherRows, loomWords, partRows, partsWords, type ShownFor } from '#core/gathering/rows.ts';
+import { gatherRows, loomWords, partRows, partsWords, yarnSum, type ShownFor } from '#core/gathering/rows.ts';
 import { lowTide } from '../../../support/low-tide.ts';
 
 const pattern = await lowTide();
-const shownFor = (mine = {}): ShownFor => ({ made: madeFor(pattern, mine, 'cm'), pattern, units: 'cm' });
+const shownFor = (mine = {}, woven = NOTHING_WOVEN): ShownFor => ({ made: madeFor(pattern, mine, 'cm', woven), pattern, units: 'cm' });
 let count = 0;
 function line(part: number, given: Partial<GatheringLine>): GatheringLine {
   count += 1;
@@ -76,4 +77,31 @@ test('a piece that no longer fits the changed pattern gives way to it, and says 
   const made = madeFor(pattern, { loom: { insideWidthMm: 60 } }, 'cm');
   expect(made?.isOwn).toBe(false);
   expect(made?.problems[0]?.path).toBe('/loom/insideWidthMm');
+});
+
+describe('the list of a piece that is half woven', () => {
+  // Both bands of fringe and the foot between them are finished.
+  const begun = { bandsDone: pattern.bands.findIndex(({ name }) => name === 'dark-shore') };
+  const list = (key: string, woven = begun) => gatherRows([line(1, { ...estuary, amountKey: key })], shownFor({}, woven))[0];
+  const metres = (key: string, woven = begun): number => Number.parseFloat(textOf(list(key, woven)?.amount));
+
+  test('asks for the yarn of what is still to weave', () => {
+    expect(metres('yarn.shore')).toBeGreaterThan(0);
+    expect(metres('yarn.shore')).toBeLessThan(metres('yarn.shore', NOTHING_WOVEN));
+    expect(metres('yarn.water')).toBe(metres('yarn.water', NOTHING_WOVEN));
+  });
+
+  test('asks for none of a yarn that is woven, nor for the warp on the loom', () => {
+    expect(list('yarn.fringe')).toMatchObject({ amount: 'Woven', also: '' });
+    expect(list('warp')).toMatchObject({ amount: 'On the loom', also: '' });
+    const made = shownFor({}, begun).made;
+    const rest = made?.halfway?.rest;
+    expect(made && yarnSum(made).lengthMm).toBeCloseTo(Object.values(rest?.yarns ?? {}).reduce((sum, { withMarginMm }) => sum + withMarginMm, 0), 6);
+  });
+
+  test('of a part asks for the yarn of its band only while that is not woven', () => {
+    const ofPart = (key: string) => partRows([line(4, { ...estuary, amountKey: key })], 4, shownFor({}, begun))[0]?.amount;
+    expect(ofPart('band.foot.yarn')).toBe('Woven');
+    expect(textOf(ofPart('band.dark-shore.yarn'))).toMatch(/m$/);
+  });
 });

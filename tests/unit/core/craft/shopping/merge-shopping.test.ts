@@ -2,7 +2,7 @@ import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { fitPiece } from '#core/craft/fit.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
-import { mergeShopping, type Shopping } from '#core/craft/shopping/merge-shopping.ts';
+import { mergeShopping, type PieceToShop, type Shopping } from '#core/craft/shopping/merge-shopping.ts';
 import { cases } from '../../../../support/random-cases.ts';
 import { lowTide } from '../../../../support/low-tide.ts';
 import { pieceWith, planOf } from '../a-piece.ts';
@@ -11,7 +11,7 @@ const pattern = await lowTide();
 const BALL = { metres: 90, grams: 50 };
 const WOOL = { label: 'Fenwool 6/2, Sky', metresPer100g: 180, ball: BALL } as const;
 const SKY: FrameLoomPiece = pieceWith({ yarns: { ground: WOOL } });
-const shop = (...pieces: { name: string; piece: unknown }[]): Shopping => {
+const shop = (...pieces: PieceToShop[]): Shopping => {
   const merged = mergeShopping(pieces);
   if (!merged.ok) throw new Error(JSON.stringify(merged.problems));
   return merged.value;
@@ -27,6 +27,14 @@ describe('yarn', () => {
     expect(wool(two)).toMatchObject({ balls: { count: 3 }, pieces: ['One', 'Other'] });
     expect((wool(two)?.withMarginMm ?? 0) / 1000).toBeCloseTo(212.03, 1);
     expect((wool(two)?.balls?.leftOverMm ?? 0) / 1000).toBeCloseTo(270 - 212.03, 1);
+  });
+
+  // 177 rows and 8 loads: 58.94 m, with 15 % 67.78 m: one ball of 90 m, and no warp.
+  test('of a piece half woven is that of what is still to weave', () => {
+    const list = shop({ name: 'One', piece: SKY, woven: { bandsDone: 0, rows: 100 } });
+    expect(list.yarns.map(({ name, balls }) => [name, balls?.count])).toEqual([[WOOL.label, 1]]);
+    expect(list.yarns[0]?.withMarginMm).toBeCloseTo(67_780, -2);
+    expect(shop({ name: 'One', piece: SKY, woven: { bandsDone: 9 } })).toEqual(shop({ name: 'One', piece: SKY }));
   });
 
   test('is the same only with label, fineness, colour and ball', () => {
