@@ -11,36 +11,10 @@ import { readCount } from '#core/craft/yarn/count-text.ts';
 import { COUNT_SYSTEMS, countFromTex, metresPer100gFromTex, texFromMetresPer100g, texFromYardsPerPound, yardsPerPoundFromTex } from '#core/craft/yarn/count.ts';
 import { compressedFromLoft, loftFromWraps, texFromWraps } from '#core/craft/yarn/diameter.ts';
 import { threadOf } from '#core/craft/yarn/thread.ts';
-
-export interface FigureTableData {
-  readonly title: string;
-  /** The first column names the row. */
-  readonly columns: readonly { readonly name: string; readonly unit?: string }[];
-  readonly rows: readonly (readonly string[])[];
-  /** Where the numbers come from and how far to trust them. */
-  readonly reckonedBy: string;
-}
-
-const MM_PER_INCH = 25.4;
-const THIN_SPACE = '\u2009';
-
-/** A number with so many decimals, thousands set apart. */
-function figure(value: number, decimals = 0): string {
-  const [whole = '', rest] = value.toFixed(decimals).split('.');
-  const grouped = whole.length > 4 ? whole.replace(/\B(?=(?:\d{3})+$)/g, THIN_SPACE) : whole;
-  return rest === undefined ? grouped : `${grouped}.${rest}`;
-}
-
-/** At most two decimals, and none that say nothing. */
-function size(value: number): string {
-  return String(Math.round((value + 1e-9) * 100) / 100);
-}
-
-/** To two digits that count: for values that are estimates. */
-function about(value: number): string {
-  const step = 10 ** Math.max(0, Math.floor(Math.log10(value)) - 1);
-  return figure(Math.round(value / step) * step);
-}
+import { about, figure, MM_PER_INCH, size, type FigureTableData } from '#components/handbook/table-figures.ts';
+import { TABLES_OF_FINISHING } from '#components/handbook/tables-of-finishing.ts';
+import { TABLES_OF_PLANNING } from '#components/handbook/tables-of-planning.ts';
+import { TABLES_OF_WEAVING } from '#components/handbook/tables-of-weaving.ts';
 
 const SAID_OF_COUNTS: readonly { readonly says: string; readonly system: CountSystem }[] = [
   { says: 'Nm', system: 'nm' },
@@ -223,6 +197,9 @@ const TABLES = {
   'take-up': takeUp,
   'soumak-yarn': soumakYarn,
   'rya-lengths': ryaLengths,
+  ...TABLES_OF_FINISHING,
+  ...TABLES_OF_PLANNING,
+  ...TABLES_OF_WEAVING,
 } as const;
 
 export type TableName = keyof typeof TABLES;

@@ -2,11 +2,16 @@
 
 /** In the order they are read. */
 export const HANDBOOK_TOPICS = [
-  { key: 'loom', title: 'The loom', says: 'Frame, nails, spacing, and the warp that is wound on them.' },
-  { key: 'yarn', title: 'Yarn', says: 'How thick a yarn is, how to tell, and how to look after it.' },
-  { key: 'techniques', title: 'Techniques', says: 'What the weft can do, from the plainest row to pile and ridge.' },
+  { key: 'planning', title: 'Before you begin', says: 'Choosing, reading, reckoning: what is settled before the first end is wound.' },
+  { key: 'loom', title: 'The loom and its warp', says: 'Frame, nails, heddle, spacing, and the warp that is wound on them.' },
+  { key: 'yarn', title: 'Yarn and fibre', says: 'How thick a yarn is, how to tell, what it is made of, and how to look after it.' },
+  { key: 'techniques', title: 'Weaving', says: 'What the weft can do, from the plainest row to pile and ridge.' },
+  { key: 'shapes', title: 'Colour and shape', says: 'Several colours in one row: what comes first, and how they meet.' },
+  { key: 'knots', title: 'Knotting', says: 'The few knots of macramé, and how much cord they take.' },
+  { key: 'finishing', title: 'Finishing', says: 'Off the loom, and up on the wall: edges, fringe, washing, rod and label.' },
   { key: 'mending', title: 'Mending', says: 'What you see, what it means, and what to do about it.' },
   { key: 'safety', title: 'Safety', says: 'What can hurt, and whom to ask.' },
+  { key: 'looking-up', title: 'To look up', says: 'Words of the trade, and measures turned into each other.' },
 ] as const;
 
 export type HandbookTopic = (typeof HANDBOOK_TOPICS)[number]['key'];

@@ -18,7 +18,7 @@ export const LARKS_HEAD: KnotFigure = {
   describe: ({ plan, units }) => {
     const [first] = plan.columns;
     const cut = first === undefined ? '' : ` Here each cord is cut to ${lengthWords(first.cutMm, units, 'cut')} and folded in its middle.`;
-    return `The fold is laid over the rod from behind, so that it hangs down in front. Both halves come forward under the rod and go down through the fold; drawn close, its bar lies across the front.${cut}`;
+    return `The fold is laid over the rod from behind, so that it hangs down in front. Both halves come forward under the rod and go down through the fold; drawn close, they lie over its bar, which holds them to the rod.${cut}`;
   },
   steps: () => [
     { weight: 2, words: 'Lay the fold over the rod from behind, so that it hangs down in front.' },
@@ -32,8 +32,9 @@ export const LARKS_HEAD: KnotFigure = {
     scene.add(LEVEL.warp, wood(40, ROD.top, 480, ROD.high));
     const fold = trail(LEFT, ROD.top - 8).to(LEFT, bar - 26).curve(LEFT, bar + 6, RIGHT, bar + 6, RIGHT, bar - 26).to(RIGHT, ROD.top - 8);
     layStrand(scene, { colour: working, width: THICK, runs: [{ level: LEVEL.above, points: fold.points }] }, laid);
+    /* Through the fold is over its bar: behind it they would only hang there, and slip off. */
     for (const x of [LEFT + 14, RIGHT - 14]) {
-      layStrand(scene, { colour: working, width: THICK, runs: [{ level: LEVEL.behind, points: trail(x, ROD.top - 6).to(x, ROD.top + ROD.high + 14).points }, { level: LEVEL.front, points: trail(x, ROD.top + ROD.high + 14).to(x, 320).points }] }, laid < 1 ? laid * 0.3 : 0.3 + 0.7 * through);
+      layStrand(scene, { colour: working, width: THICK, runs: [{ level: LEVEL.behind, points: trail(x, ROD.top - 6).to(x, ROD.top + ROD.high + 14).points }, { level: LEVEL.above + 1, points: trail(x, ROD.top + ROD.high + 14).to(x, 320).points }] }, laid < 1 ? laid * 0.3 : 0.3 + 0.7 * through);
     }
     if (through > 0 && through < 1) handWay(scene, trail(380, 128).bend(352, 190, 372, 250).points, through);
     if (progress >= 1) handWay(scene, trail(350, 200).to(350, 300).points);
