@@ -6,6 +6,7 @@
 import type { Nodes, Root, RootContent } from 'mdast';
 import type { LessonProblem } from './problem.ts';
 import { readMarkdown, type ReadText } from './read-markdown.ts';
+import { readPlain } from './read-plain.ts';
 
 /** Readings of stretches by their words. Those not needed by the last text are let go. */
 export class KeptReadings {
@@ -15,7 +16,7 @@ export class KeptReadings {
   readAll(stretches: readonly string[]): ReadText[] {
     const next = new Map<string, ReadText>();
     const readings = stretches.map((words) => {
-      const reading = next.get(words) ?? this.#read.get(words) ?? readMarkdown(words);
+      const reading = next.get(words) ?? this.#read.get(words) ?? readStretch(words);
       next.set(words, reading);
       return reading;
     });
@@ -27,7 +28,7 @@ export class KeptReadings {
 /** The Markdown tree of a text that passed `preScan`, as `readMarkdown` reads it. Nodes are never shared with `kept`. */
 export function readInStretches(source: string, kept: KeptReadings): ReadText {
   const stretches = cutText(source);
-  if (stretches.length < 2) return readMarkdown(source);
+  if (stretches.length < 2) return readStretch(source);
   const readings = kept.readAll(stretches);
   const children: RootContent[] = [];
   let [line, offset] = [0, 0];
@@ -41,6 +42,11 @@ export function readInStretches(source: string, kept: KeptReadings): ReadText {
     offset += words.length;
   }
   return { ok: true, root: { type: 'root', children } };
+}
+
+function readStretch(words: string): ReadText {
+  const plain = readPlain(words);
+  return plain === undefined ? readMarkdown(words) : { ok: true, root: plain };
 }
 
 const CUT = /\n\n(?=[A-Za-z#<])/g;

@@ -7,6 +7,7 @@ import { explainSyntaxError } from '#core/lesson-text/explain-syntax.ts';
 import { checkLinkAddress } from '#core/lesson-text/link-address.ts';
 import { plainWords } from '#core/lesson-text/plain-text.ts';
 import { preScan } from '#core/lesson-text/pre-scan.ts';
+import { readPlain } from '#core/lesson-text/read-plain.ts';
 import { slugOf } from '#core/lesson-text/slugs.ts';
 import { leastTime } from './least-time.ts';
 
@@ -23,6 +24,9 @@ const READERS: Record<string, (text: string) => unknown> = {
   'checkLinkAddress, of anything': (text) => checkLinkAddress(text, Infinity),
   plainWords: (text) => plainWords([{ type: 'text', value: text }]),
   preScan,
+  readPlain: (text) => readPlain(text),
+  'readPlain, of stress that does not close': (text) => readPlain(`Z *a${text}`),
+  'readPlain, of a tag that does not close': (text) => readPlain(`<A${' b="c"'.repeat(20_000)}${text}`),
   slugOf,
   explainSyntaxError: (text) => explainSyntaxError(Object.assign(new Error('x'), { reason: `Unexpected \`<${text}`, ruleId: 'end-tag-mismatch', line: 1, column: 1 }), text),
 };
