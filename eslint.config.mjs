@@ -74,6 +74,7 @@ export default tseslint.config(
   layer(['src/server/auth/**'], [NO_EDGE, NO_BROWSER]),
   layer(['src/server/policies/**'], [NO_EDGE, NO_BROWSER, NO_SEQUELIZE, NO_LUCIA, { regex: '^#server/(?!policies/|context|errors)', message: 'A policy judges facts it is handed: load them in the use-case or query.', allowTypeImports: true }]),
   layer(['src/stand-ins/**'], [NO_EDGE, NO_SEQUELIZE, { regex: '^#server/', message: 'A stand-in plays somebody outside the house and knows nothing of its inside.' }]),
+  layer(['src/service-worker/**'], [NO_SERVER, NO_SEQUELIZE, NO_EDGE, NO_BROWSER]),
   layer(['src/islands/**'], [NO_SERVER, NO_SEQUELIZE, NO_EDGE]),
   layer(['src/components/**', 'src/layouts/**'], [
     { regex: '^#server/(?!web/|presenters/|queries/|context\\.ts)|^#stand-ins/', message: 'A component draws what it is handed: let the page ask a query and pass plain data.' },

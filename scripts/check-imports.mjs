@@ -22,6 +22,7 @@ const MAY_IMPORT = {
   'stand-ins': ['core'],
   'processes': ['server', 'stand-ins', 'core', 'contracts', 'processes'],
   'islands': ['core', 'contracts', 'components'],
+  'service-worker': ['core', 'contracts'],
   'components': ['core', 'contracts', 'islands', 'server/context.ts', 'server/web', 'server/presenters', 'server/queries'],
   'layouts': ['core', 'contracts', 'islands', 'components', 'server/web', 'server/presenters', 'styles'],
   'pages': ['core', 'contracts', 'islands', 'components', 'layouts', 'server', 'styles', 'actions'],

@@ -6,9 +6,10 @@ import { randomUUID } from 'node:crypto';
 import type { APIContext, MiddlewareNext } from 'astro';
 import { getActionContext, type ActionError } from 'astro:actions';
 import { defineMiddleware } from 'astro:middleware';
+import { NOBODY, PAGE_OF_HEADER, SAID_ONCE_HEADER, TO_KEEP_HEADER } from '#contracts/kept-pages.ts';
 import { actorOfToken, sessionCookie } from '#server/auth/sessions.ts';
 import { config } from '#server/config.ts';
-import { systemClock } from '#server/context.ts';
+import { systemClock, type Actor } from '#server/context.ts';
 import { AppError } from '#server/errors.ts';
 import { presentSitePerson } from '#server/presenters/site-person.ts';
 import { services } from '#server/services.ts';
@@ -41,14 +42,15 @@ export const onRequest = defineMiddleware(async (context, next) => {
     if (answer === 'sign-in-first') throw new AppError('UNAUTHENTICATED');
     if (answer === 'not-yours') throw new AppError('FORBIDDEN', { says: 'This page belongs to another workroom.' });
     const response = (await answerFormAction(context, next)) ?? (await next());
-    return withHeaders(response, actor !== null);
+    return withHeaders(response, actor, locals.said !== null);
   } catch (error) {
     return isApi ? problem(error, requestId) : pageForError(context, error, requestId);
   }
 });
 
-/** A sentence left by the page before, shown once. */
+/** A sentence left by the page before, shown once, and to a person: a page that is only kept leaves it for her. */
 function takeSaid(context: APIContext): string | null {
+  if (context.request.headers.has(TO_KEEP_HEADER)) return null;
   const { name } = saidCookie();
   const said = context.cookies.get(name)?.value ?? null;
   if (said !== null && context.request.method === 'GET') context.cookies.delete(name, { path: '/' });
@@ -93,13 +95,15 @@ function appErrorOfAction(error: ActionError | undefined): AppError {
   }
 }
 
-function withHeaders(response: Response, signedIn: boolean): Response {
+function withHeaders(response: Response, actor: Actor | null, saysOnce: boolean): Response {
   const { payments, publicUrl } = config();
   const payOrigin = payments.url === undefined ? 'https://checkout.stripe.com' : new URL(payments.url, publicUrl).origin;
   const isPage = response.headers.get('content-type')?.startsWith('text/html') === true;
   const policy = isPage ? completePolicy(response.headers.get('content-security-policy'), payOrigin) : null;
   if (policy !== null) response.headers.set('content-security-policy', policy);
-  if (!response.headers.has('cache-control')) response.headers.set('cache-control', cacheRule(signedIn));
+  if (isPage) response.headers.set(PAGE_OF_HEADER, actor?.publicId ?? NOBODY);
+  if (saysOnce) response.headers.set(SAID_ONCE_HEADER, 'yes');
+  if (!response.headers.has('cache-control')) response.headers.set('cache-control', cacheRule(actor !== null));
   return response;
 }
 
@@ -126,7 +130,7 @@ async function pageForError(context: APIContext, error: unknown, requestId: stri
   try {
     const page = await context.rewrite(new Request(new URL('/refused', context.url), { method: 'GET', headers: { accept: 'text/html' } }));
     if (known.retryAfterSeconds !== undefined) page.headers.set('retry-after', String(known.retryAfterSeconds));
-    return withHeaders(new Response(page.body, { status: known.status, headers: page.headers }), true);
+    return withHeaders(new Response(page.body, { status: known.status, headers: page.headers }), 'ctx' in context.locals ? context.locals.ctx.actor : null, true);
   } catch {
     return new Response(null, { status: 500 });
   }

@@ -4,6 +4,8 @@ export type Role = 'student' | 'teacher' | 'helper' | 'steward';
 
 export interface SitePerson {
   name: string;
+  /** Of whom things are kept on this device; absent where nothing is. */
+  publicId?: string;
   roles: readonly Role[];
   /** Her own choice of day or evening; absent or null: the system's wish. */
   scheme?: 'light' | 'dark' | null;

@@ -25,6 +25,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/loom': [['maud', '/loom'], ['jonas', '/loom'], ['amara', '/loom']],
   '/new-password/[token]': [['visitor', '/new-password/x']],
   '/notices': [['maud', '/notices'], ['amara', '/notices']],
+  '/offline': [['visitor', '/offline']],
   '/office': [['pell', '/office']],
   '/office/jobs': [['pell', '/office/jobs']],
   '/office/log': [['pell', '/office/log']],

@@ -40,6 +40,8 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/openapi.json': [{ at: '/api/openapi.json', answers: EVERYBODY }],
   '/api/payments/events': [{ at: '/api/payments/events', post: true, answers: '400' }],
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
+  '/api/kept-pages': [{ at: '/api/kept-pages', answers: EVERYBODY }],
+  '/offline': [{ at: '/offline', answers: EVERYBODY }],
   '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
   '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
   '/api/rows': [{ at: '/api/rows', post: true, answers: '401 422 422 422 422 422 422' }],

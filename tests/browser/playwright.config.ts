@@ -28,6 +28,8 @@ export default defineConfig({
     trace: 'retain-on-failure',
     viewport: { width: 1280, height: 900 },
     locale: 'en-GB',
+    // Each new browser would fetch all it keeps; the journey without a connection lets it.
+    serviceWorkers: 'block',
     launchOptions: {
       executablePath: process.env['FELLMARK_TEST_CHROMIUM'] ?? '/usr/bin/chromium',
       args: ['--no-sandbox', '--disable-gpu', '--disable-quic', '--disable-background-networking', '--disable-component-update', '--disable-sync'],

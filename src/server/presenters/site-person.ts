@@ -5,6 +5,7 @@ import type { Actor } from '#server/context.ts';
 export function presentSitePerson(actor: Actor): SitePerson {
   return {
     name: actor.name,
+    publicId: actor.publicId,
     roles: [
       'student',
       ...(actor.workroomId === null ? [] : ['teacher' as const]),

@@ -28,6 +28,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/500': 'public',
   '/_components': 'public',
   '/api/payments/events': 'machine',
+  '/api/kept-pages': 'public',
+  '/offline': 'public',
   '/api/photos': 'signed-in',
   '/api/openapi.json': 'machine',
   '/api/reckon': 'machine',

@@ -1,6 +1,7 @@
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { APIContext } from 'astro';
 import { onRequest } from '../../../src/middleware.ts';
+import { PAGE_OF_HEADER, SAID_ONCE_HEADER, TO_KEEP_HEADER } from '#contracts/kept-pages.ts';
 import { beginSession } from '#server/auth/sessions.ts';
 import { statementListeners } from '#server/db/sequelize.ts';
 import { AppError } from '#server/errors.ts';
@@ -199,6 +200,22 @@ describe('a form', () => {
 });
 
 describe('a page', () => {
+  const html = (): Response => new Response('the page', { headers: { 'content-type': 'text/html' } });
+
+  test('says whose it is, so that a device keeps it for nobody else, and whether its words are said once', async () => {
+    const maud = await buildUser();
+    const cookies = await cookiesOf(maud);
+    expect((await ask({ route: '/sign-in', page: html })).response.headers.get(PAGE_OF_HEADER)).toBe('nobody');
+    const own = await ask({ route: '/loom', page: html, cookies });
+    expect([own.response.headers.get(PAGE_OF_HEADER), own.response.headers.has(SAID_ONCE_HEADER)]).toEqual([maud.publicId, false]);
+    expect((await ask({ route: '/loom', page: html, cookies: { ...cookies, said: 'Saved.' } })).response.headers.has(SAID_ONCE_HEADER)).toBe(true);
+  });
+
+  test('that is only kept leaves what is said once to the next one that is read', async () => {
+    const { jar, context } = await ask({ route: '/loom', page: html, cookies: { said: 'Saved.' }, headers: { [TO_KEEP_HEADER]: 'yes' } });
+    expect([context.locals.said, jar.get('said')]).toEqual([null, 'Saved.']);
+  });
+
   test('that breaks tells a code to find it by, and no more', async () => {
     logged.mockImplementation(() => undefined);
     const { response, context, text } = await ask({ route: '/sign-in', page: () => { throw new Error('secret of the house'); } });

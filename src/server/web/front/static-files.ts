@@ -24,6 +24,9 @@ const HASHED_FOLDER = '/_astro/';
 const ERROR_PAGES = new Set(['/404.html', '/500.html']);
 const ERROR_ADDRESSES = new Set(['/404', '/404/', '/500', '/500/']);
 const NOWHERE = '/not-a-page';
+/** Outlives the pages it fetches: never older than the build, and it reaches nothing but the house. */
+const SERVICE_WORKER = '/service-worker.js';
+const WORKER_POLICY = "default-src 'none'; connect-src 'self'";
 const FOREVER = 'public, max-age=31536000, immutable';
 const BRIEFLY = 'public, max-age=3600';
 
@@ -41,7 +44,8 @@ export function staticFiles(folder: string): Handler {
 }
 
 function serve(request: IncomingMessage, response: ServerResponse, root: string, file: StaticFile): void {
-  response.setHeader('Cache-Control', file.name.startsWith(HASHED_FOLDER) ? FOREVER : BRIEFLY);
+  response.setHeader('Cache-Control', cacheRuleOf(file.name));
+  if (file.name === SERVICE_WORKER) response.setHeader('Content-Security-Policy', WORKER_POLICY);
   let name = file.name;
   if (file.codings.length > 0) {
     response.setHeader('Vary', varyByEncoding(response.getHeader('vary')));
@@ -57,6 +61,11 @@ function serve(request: IncomingMessage, response: ServerResponse, root: string,
   send(request, encodeURI(name), { root, cacheControl: false, dotfiles: 'allow', index: false })
     .on('error', () => { refuse(request, response, 404, 'This file is not here.'); })
     .pipe(response);
+}
+
+function cacheRuleOf(name: string): string {
+  if (name === SERVICE_WORKER) return 'no-cache';
+  return name.startsWith(HASHED_FOLDER) ? FOREVER : BRIEFLY;
 }
 
 /** All files below `root` by the path they are asked for by. */

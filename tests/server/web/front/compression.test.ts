@@ -96,6 +96,12 @@ describe('the build\'s files', () => {
     expect((await front.ask('/about')).text).toBe('<p>about</p>');
   });
 
+  test('of the service worker is asked for anew each time, and reaches nothing but the house', async () => {
+    front = await startFront({ site: page(), files: { 'service-worker.js': '// Build 1' } });
+    const { headers } = await front.ask('/service-worker.js');
+    expect([headers['cache-control'], headers['content-security-policy'], headers['content-type']]).toEqual(['no-cache', "default-src 'none'; connect-src 'self'", 'text/javascript; charset=utf-8']);
+  });
+
   test('are nothing else: twins, error pages and ways out of the folder go to the site', async () => {
     front = await startFront({ site: (_request, response) => { response.writeHead(404).end('site'); }, files: { 'a.css': 'body{}', 'a.css.br': 'BR', '404.html': 'x' } });
     for (const target of ['/a.css.br', '/404.html', '/..%2Fuploads']) expect((await front.ask(target)).status).toBe(404);
