@@ -9,11 +9,13 @@ import { stretchAt, stretchesOf, watchedWords } from '#islands/film/stretches.ts
 const CHAPTERS = [{ atMs: 0, title: 'Begin' }, { atMs: 60_000, title: 'Knot' }, { atMs: 90_000, title: 'Trim' }];
 const CUES = [{ fromMs: 1_000, toMs: 2_000, words: 'Over one.' }, { fromMs: 61_000, toMs: 62_000, words: 'Under the next.' }];
 const play = vi.fn(function play(this: HTMLMediaElement) { this.dispatchEvent(new Event('play')); return Promise.resolve(); });
+/** Which film the browser was told to load, each time. */
+const load = vi.fn(function load(this: HTMLMediaElement) { return this.querySelector('source')?.getAttribute('src'); });
 const pause = vi.fn(function pause(this: HTMLMediaElement) { this.dispatchEvent(new Event('pause')); });
 
 beforeEach(() => {
   vi.clearAllMocks();
-  Object.assign(HTMLMediaElement.prototype, { play, pause, load: vi.fn() });
+  Object.assign(HTMLMediaElement.prototype, { play, pause, load });
   localStorage.clear();
 });
 afterEach(cleanup);
@@ -63,6 +65,7 @@ describe('a film', () => {
     render(player({ small }));
     expect(source()).toBe('/media/v/small');
     expect(screen.getByRole('button', { name: /^Small film/, pressed: true })).toBeDefined();
+    expect(load.mock.results.map(({ value }) => value as string)).toEqual(['/media/v/small', '/media/v/small']);
     cleanup();
     render(player());
     expect(source()).toBe('/media/v/video');
