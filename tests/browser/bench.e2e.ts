@@ -24,7 +24,7 @@ async function studentWithPhotos(browser: Browser, request: APIRequestContext, n
   await page.goto(`/series/${CORDS.slug}/2`);
   const lesson = await page.locator('input[name="lesson"]').first().inputValue();
   for (let photo = 0; photo < PHOTOS_EACH; photo += 1) {
-    const buffer = await sharp({ create: { width: 1_200, height: 900, channels: 3, background: { r: 40 * number, g: 40 * photo, b: 120 } } }).jpeg().toBuffer();
+    const buffer = await sharp({ create: { width: 400, height: 300, channels: 3, background: { r: 40 * number, g: 40 * photo, b: 120 } } }).jpeg().toBuffer();
     const sent = await context.request.post('/api/photos', {
       headers: { 'sec-fetch-site': 'same-origin' },
       multipart: { series: CORDS.slug, lesson, words: `Photo ${photo + 1}`, photo: { name: 'cords.jpg', mimeType: 'image/jpeg', buffer } },

@@ -26,6 +26,7 @@ async function otherBrowser(browser: Browser, page: Page): Promise<Page> {
 test('a student tells her loom, gathers, follows the steps and shows her photo', async ({ page, request, browser }) => {
   test.setTimeout(150_000);
   await newStudent(page, request);
+  await page.goto('/loom');
   await expectFaultless(page);
 
   await test.step('an impossible loom is told at its field, and nothing typed is lost', async () => {
