@@ -1,6 +1,6 @@
 /**
- * A teacher who has never been here makes a series in seven parts from a blank page, through the pages alone: piece, parts,
- * texts, lists, films with captions, timetable, price. A student finds it, buys it and starts.
+ * A teacher who has never been here, and owns no mouse, makes a series in seven parts from a blank page, through the pages
+ * alone: piece, parts, texts, lists, films with captions, timetable, price. A student finds it, buys it on her phone and starts.
  */
 import { randomBytes } from 'node:crypto';
 import { mkdtemp, rm } from 'node:fs/promises';
@@ -8,9 +8,10 @@ import os from 'node:os';
 import path from 'node:path';
 import { expect, test as base, type Browser, type Page } from 'playwright/test';
 import { makeClip } from '../support/clips.ts';
+import { choose, pick, press, skipToWork, tabTo, takeFile, typeInto } from './support/by-keys.ts';
 import { DEMO } from './support/demo-people.ts';
 import { fillPiece } from './support/fill-piece.ts';
-import { fillText } from './support/lesson-text.ts';
+import { textField } from './support/lesson-text.ts';
 import { letterTo } from './support/mail-tray.ts';
 import { newPerson, signInHere, type NewPerson } from './support/new-person.ts';
 import { CARD, payWith, untilSeat } from './support/pay.ts';
@@ -43,8 +44,11 @@ base.afterAll(() => rm(folder, { recursive: true }));
 base.setTimeout(420_000);
 base.use({ actionTimeout: 15_000 });
 
-const slugOf = (title: string): string => title.toLowerCase().replaceAll(' ', '-');
 const main = (page: Page) => page.getByRole('main');
+const link = (page: Page, name: string | RegExp) => main(page).getByRole('link', { name, ...typeof name === 'string' ? { exact: true } : {} }).first();
+const headOf = (page: Page, { title }: Part) => page.getByRole('heading', { level: 1, name: title });
+/** From a page of one part to the same page of the part beside it. */
+const stepTo = (page: Page, number: number) => link(page, `Part ${number}, ${PARTS[number - 1]?.title ?? ''}`);
 
 /** The steward finds her among the people and gives her a workroom. */
 async function letIn(browser: Browser, { email }: NewPerson, workroom: string): Promise<void> {
@@ -72,112 +76,125 @@ test('a newcomer builds a series in seven parts, and a student finds, buys and s
   const name = `Strandline ${tag}`;
   const teacher = await newPerson(request);
   let desk = '';
+  const places: string[] = [];
 
   await test.step('she is let in, and is told where to begin', async () => {
     await letIn(browser, teacher, `Room ${tag}`);
     await page.goto('/sign-in?to=/workroom');
     await signInHere(page, teacher);
     await expect(page.getByRole('heading', { level: 1 })).toBeVisible();
-    await main(page).getByRole('link', { name: 'Make a series' }).click();
-    await page.getByLabel('Title').fill(title);
-    await main(page).getByRole('button', { name: 'Make the series' }).click();
+    await press(page, main(page).getByRole('link', { name: 'Make a series' }));
+    await typeInto(page, page.getByLabel('Title'), title);
+    await page.keyboard.press('Enter');
     await expect(page.getByRole('heading', { level: 1, name })).toBeVisible();
     desk = new URL(page.url()).pathname;
   });
 
   await test.step('the piece, drawn and reckoned as she types', async () => {
-    await page.goto(`${desk}/piece`);
+    await press(page, main(page).getByRole('link', { name: 'Describe the piece' }).first());
     await fillPiece(page, { Width: '24', Height: '30', 'Nail to nail, along': '8' });
-    await main(page).getByRole('button', { name: 'Save the piece' }).first().click();
+    await page.keyboard.press('Enter');
     await expect(page.getByText('The piece is saved.')).toBeVisible();
   });
 
   await test.step('seven parts, put in their order', async () => {
     await page.goto(desk);
+    await skipToWork(page);
     for (const { title: part } of PARTS) {
-      await page.getByLabel('Put in a part').fill(part);
-      await main(page).getByRole('button', { name: 'Put it in' }).click();
+      await typeInto(page, page.getByLabel('Put in a part'), part);
+      await page.keyboard.press('Enter');
       await expect(page.getByRole('heading', { level: 3, name: part })).toBeVisible();
+    }
+    await press(page, link(page, 'Read the shore'));
+  });
+
+  await test.step('seven texts, and two films', async () => {
+    for (const [index, part] of PARTS.entries()) {
+      await expect(headOf(page, part)).toBeVisible();
+      places.push(page.url());
+      await tabTo(page, textField(page));
+      await page.keyboard.insertText(part.words);
+      await page.keyboard.press('Control+s');
+      await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+      if (part.film === true) {
+        await press(page, link(page, 'Video'));
+        await takeFile(page, main(page).getByRole('button', { name: 'Choose a video' }), makeClip(folder, `film-${index + 1}.mp4`));
+        await expect(page.getByText('All of it is here').or(page.getByText('It is being made ready')).or(link(page, /Captions/)).first()).toBeVisible({ timeout: 60_000 });
+        await page.goto(places[index] ?? '');
+      }
+      if (index < PARTS.length - 1) await press(page, stepTo(page, index + 2));
     }
   });
 
-  for (const [index, part] of PARTS.entries()) {
-    await test.step(`Part ${index + 1}: text, list, photo, day`, async () => {
-      await page.goto(desk);
-      await main(page).getByRole('link', { name: part.title, exact: true }).first().click();
-      const place = new URL(page.url()).pathname;
-      await fillText(page, part.words);
-      await page.keyboard.press('Control+s');
-      await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+  await test.step('seven lists', async () => {
+    for (const [index, part] of PARTS.entries()) {
+      await page.goto(`${places[index]}/gather`);
       for (const [tool, howMuch] of part.tools) {
-        await page.goto(`${place}/gather`);
         const add = main(page).getByRole('region', { name: 'Put something on the list' });
-        await add.getByLabel('Name', { exact: true }).fill(tool);
-        if (howMuch !== '') await add.getByLabel('Or how much in words').fill(howMuch);
-        await add.getByRole('button', { name: 'Put it on the list' }).click();
+        await typeInto(page, add.getByLabel('Name', { exact: true }), tool);
+        if (howMuch !== '') await typeInto(page, add.getByLabel('Or how much in words'), howMuch);
+        await page.keyboard.press('Enter');
         await expect(main(page).getByRole('listitem').filter({ hasText: tool }).first()).toBeVisible();
       }
-      await page.goto(`${place}/settings`);
-      if (index === 0) await page.getByLabel('Free to read').check();
-      if (part.photo !== undefined) {
-        await page.getByLabel('Ask for a photo').check();
-        await page.getByLabel('What it shall show').fill(part.photo);
-      }
+    }
+  });
+
+  await test.step('what each asks for, and when it opens', async () => {
+    for (const [index, part] of PARTS.entries()) {
+      await page.goto(`${places[index]}/settings`);
+      if (index === 0) await press(page, page.getByLabel('Free to read'), ' ');
       if (part.after !== undefined) {
-        await page.getByLabel('After you have seen a photo').check();
-        await page.getByLabel('It opens when you say weave on to the photo of').selectOption({ label: `Part ${part.after}, ${PARTS[part.after - 1]?.title}` });
+        await choose(page, page.getByLabel('After you have seen a photo'));
+        await pick(page, page.getByLabel('It opens when you say weave on to the photo of'), `Part ${part.after}, ${PARTS[part.after - 1]?.title}`);
       }
       if (part.daysIn !== undefined) {
-        await page.getByLabel('Some days after the seat began').check();
-        await page.getByLabel('How many days').fill(String(part.daysIn));
+        await choose(page, page.getByLabel('Some days after the seat began'));
+        await typeInto(page, page.getByLabel('How many days'), String(part.daysIn));
       }
-      await main(page).getByRole('button', { name: 'Save', exact: true }).click();
-      await expect(page.getByText('Saved').first()).toBeVisible();
-      if (part.film !== true) return;
-      await page.goto(`${place}/video`);
-      await page.getByTestId('video-chooser').setInputFiles(makeClip(folder, `film-${index + 1}.mp4`, { seconds: 3 }));
-      await expect(page.getByText('All of it is here').or(page.getByText('It is being made ready')).or(main(page).getByRole('link', { name: /Captions/ })).first()).toBeVisible({ timeout: 60_000 });
-    });
-  }
+      if (part.photo !== undefined) {
+        await press(page, page.getByLabel('Ask for a photo'), ' ');
+        await typeInto(page, page.getByLabel('What it shall show'), part.photo);
+      }
+      await press(page, main(page).getByRole('button', { name: 'Save', exact: true }));
+      await expect(page.getByText(/^Saved \d\d:\d\d$/).first()).toBeVisible();
+    }
+  });
 
   await test.step('the films are ready, and each gets its captions', async () => {
     for (const [index, part] of PARTS.entries()) {
       if (part.film !== true) continue;
-      await page.goto(desk);
-      await main(page).getByRole('link', { name: part.title, exact: true }).first().click();
-      await main(page).getByRole('link', { name: 'Video', exact: true }).click();
-      const captions = main(page).getByRole('link', { name: 'Write the captions' });
+      await page.goto(`${places[index]}/video`);
+      const captions = link(page, 'Write the captions');
       await expect(captions).toBeVisible({ timeout: 120_000 });
-      await captions.click();
-      await page.getByRole('button', { name: 'Write a line here' }).press('Enter');
+      await press(page, captions);
+      await expect(page.locator('astro-island[ssr]')).toHaveCount(0);
+      await press(page, page.getByRole('button', { name: 'Write a line here' }));
       await page.keyboard.type('See how the thread goes.');
       await expect(page.getByText(/^Saved \d\d:\d\d/)).toBeVisible({ timeout: 30_000 });
-      await page.goto(`${desk}/videos/${slugOf(part.title)}`);
-      await main(page).getByRole('link', { name: `Part ${index + 1}`, exact: true }).click();
-      await main(page).getByRole('button', { name: /at the head of the text/ }).click();
+      await press(page, page.getByRole('link', { name: /^Part \d$/ }).first());
+      await press(page, main(page).getByRole('button', { name: /at the head of the text/ }));
       await expect(page.getByRole('textbox', { name: 'Text of this part' })).toContainText('<Video');
     }
   });
 
   await test.step('words and price, then nothing is missing', async () => {
     await page.goto(desk);
-    await page.getByLabel('Summary').fill('A small hanging in the colours of a shore, for a first frame.');
-    await page.getByLabel('What makes it worth weaving').fill('Each part ends where the eye can rest.');
-    await page.getByLabel('Techniques').fill('tabby');
-    await page.getByLabel('Price of a seat').fill('36');
-    await main(page).getByRole('button', { name: 'Save', exact: true }).click();
+    for (const [label, words] of [
+      ['Summary', 'A small hanging in the colours of a shore, for a first frame.'], ['What makes it worth weaving', 'Each part ends where the eye can rest.'],
+      ['Techniques', 'tabby'], ['Price of a seat', '36'],
+    ] as const) await typeInto(page, page.getByLabel(label), words);
+    await page.keyboard.press('Enter');
     await expect(page.getByLabel('Price of a seat')).toHaveValue('36.00');
-    await page.goto(`${desk}/before`);
+    await press(page, page.getByRole('link', { name: 'Before you publish', exact: true }).last());
     await expect(main(page).getByText('Nothing stands in the way.')).toBeVisible();
     await expect(main(page).getByText('Parts 4 to 6 can be opened while Part 3 still waits for Part 2. If they build on it, let them wait too.').first()).toBeVisible();
     await expectFaultless(page);
-    await page.goto(`${desk}/timetable`);
   });
 
   await test.step('she publishes', async () => {
     await page.goto(desk);
-    await main(page).getByRole('button', { name: 'Publish', exact: true }).click();
-    await page.getByRole('dialog').getByRole('button', { name: 'Publish' }).click();
+    await press(page, main(page).getByRole('button', { name: 'Publish', exact: true }));
+    await press(page, page.getByRole('dialog').getByRole('button', { name: 'Publish' }));
     await expect(main(page).getByText(/Open to buyers since/)).toBeVisible();
   });
 

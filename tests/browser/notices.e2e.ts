@@ -3,6 +3,7 @@
  * and leaves by the letter's link, from a mail program and by hand.
  */
 import { expect, request, type APIRequestContext } from 'playwright/test';
+import { choose, pick, press, typeInto } from './support/by-keys.ts';
 import { stateOf } from './support/demo-people.ts';
 import { letterTo, linkIn } from './support/mail-tray.ts';
 import { signInHere } from './support/new-person.ts';
@@ -33,58 +34,62 @@ test.describe('a teacher', () => {
   test.use({ storageState: stateOf('ilse') });
 
   for (const javaScriptEnabled of [true, false]) {
-    test.describe(javaScriptEnabled ? 'with script' : 'without script', () => {
+    test.describe(javaScriptEnabled ? 'by keys' : 'by keys and without script', () => {
       test.use({ javaScriptEnabled });
 
       test('writes a notice, sees it as a student with her amounts, puts it off, takes it back and throws it away', async ({ page }) => {
         const title = heading();
         await page.goto('/workroom/students');
-        await page.getByRole('link', { name: 'Write a notice' }).click();
-        await page.getByLabel('Heading').fill(title);
-        await page.getByLabel('Your words').fill('## No headings');
-        await page.getByRole('button', { name: 'Keep it and look it over' }).click();
+        await press(page, page.getByRole('link', { name: 'Write a notice' }));
+        await typeInto(page, page.getByLabel('Heading'), title);
+        await typeInto(page, page.getByLabel('Your words'), '## No headings');
+        await press(page, page.getByRole('button', { name: 'Keep it and look it over' }));
         await expect(page.getByText('A notice holds paragraphs, lists, bold words, links and amounts.')).toBeVisible();
         await expect(page.getByLabel('Heading')).toHaveValue(title);
-        await page.getByLabel('Your words').fill('Yours is <Amount of="width"/> wide, says [the handbook](/handbook/tabby).');
-        await page.getByRole('button', { name: 'Keep it and look it over' }).click();
+        await typeInto(page, page.getByLabel('Your words'), 'Yours is <Amount of="width"/> wide, says [the handbook](/handbook/tabby).');
+        await press(page, page.getByRole('button', { name: 'Keep it and look it over' }));
         await expect(page.getByRole('heading', { name: title })).toBeVisible();
-        await page.getByLabel('Seen as').selectOption({ label: 'Maud Ellery' });
-        await page.getByRole('button', { name: 'Show' }).click();
+        await pick(page, page.getByLabel('Seen as'), 'Maud Ellery');
+        await press(page, page.getByRole('button', { name: 'Show' }));
         await expect(page.getByRole('article')).toContainText(/Yours is 30\scm wide/);
         await expect(page.getByText(/people get it under Notices/)).toBeVisible();
         if (javaScriptEnabled) await expectFaultless(page);
-        await page.getByRole('radio', { name: 'Later' }).check();
+        await choose(page, page.getByRole('radio', { name: 'Later' }));
         await page.getByLabel('Later: on').fill('2020-01-01T09:00');
-        await page.getByRole('button', { name: 'Send' }).click();
+        await press(page, page.getByRole('button', { name: 'Send' }));
         await expect(page.getByText('This moment has passed.')).toBeVisible();
         const nextYear = new Date(Date.now() + 30 * 86_400_000).toISOString().slice(0, 11);
         await page.getByLabel('Later: on').fill(`${nextYear}09:00`);
-        await page.getByRole('button', { name: 'Send' }).click();
-        await page.getByRole('button', { name: 'Take it back' }).click();
-        await page.getByRole('button', { name: 'Throw it away' }).click();
-        await page.getByRole('dialog').getByRole('button', { name: 'Throw it away' }).click();
+        await press(page, page.getByRole('button', { name: 'Send' }));
+        await press(page, page.getByRole('button', { name: 'Take it back' }));
+        await press(page, page.getByRole('button', { name: 'Throw it away' }));
+        await press(page, page.getByRole('dialog').getByRole('button', { name: 'Throw it away' }));
         await expect(page).toHaveURL(/\/workroom\/notices$/);
         await expect(page.getByText(title)).toHaveCount(0);
       });
     });
   }
 
-  test('looks at a nudge before it goes, and is told that one in three days is enough', async ({ page, browser, request: api }) => {
-    const name = `Nell ${Date.now().toString(36)}`;
-    const hers = await browser.newContext({ storageState: { cookies: [], origins: [] } });
-    await newStudent(await hers.newPage(), api, undefined, name);
-    await hers.close();
-    await page.goto('/workroom/students');
-    await page.getByRole('link', { name: `Nudge ${name}` }).click();
-    await expect(page.getByLabel('Your words')).toHaveValue(/That happens to everybody/);
-    await page.getByLabel('Your words').fill('Did the **spacer card** arrive?');
-    await page.getByRole('button', { name: 'See how it reads' }).click();
-    await expect(page.getByText('Did the spacer card arrive?')).toBeVisible();
-    await expectFaultless(page);
-    await page.getByRole('button', { name: 'Send it' }).click();
-    await expect(page.getByText(`${name} has it under Notices.`)).toBeVisible();
-    await page.getByRole('link', { name: `Nudge ${name}` }).click();
-    await expect(page.getByText(/One word in 3 days is enough/)).toBeVisible();
+  test.describe('on a phone', () => {
+    test.use({ viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true });
+
+    test('looks at a nudge before it goes, and is told that one in three days is enough', async ({ page, browser, request: api }) => {
+      const name = `Nell ${Date.now().toString(36)}`;
+      const hers = await browser.newContext({ storageState: { cookies: [], origins: [] } });
+      await newStudent(await hers.newPage(), api, undefined, name);
+      await hers.close();
+      await page.goto('/workroom/students');
+      await page.getByRole('link', { name: `Nudge ${name}` }).tap();
+      await expect(page.getByLabel('Your words')).toHaveValue(/That happens to everybody/);
+      await page.getByLabel('Your words').fill('Did the **spacer card** arrive?');
+      await page.getByRole('button', { name: 'See how it reads' }).tap();
+      await expect(page.getByText('Did the spacer card arrive?')).toBeVisible();
+      await expectFaultless(page);
+      await page.getByRole('button', { name: 'Send it' }).tap();
+      await expect(page.getByText(`${name} has it under Notices.`)).toBeVisible();
+      await page.getByRole('link', { name: `Nudge ${name}` }).tap();
+      await expect(page.getByText(/One word in 3 days is enough/)).toBeVisible();
+    });
   });
 });
 

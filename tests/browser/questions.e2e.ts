@@ -1,5 +1,6 @@
 /** Asking on a part and being answered; being asked to help, helping, and helping no longer. */
 import { expect, type APIRequestContext, type Browser, type Page } from 'playwright/test';
+import { press as pressKey, typeInto } from './support/by-keys.ts';
 import { stateOf, type DemoName } from './support/demo-people.ts';
 import { letterTo, linkIn } from './support/mail-tray.ts';
 import { newPerson, signInHere } from './support/new-person.ts';
@@ -36,9 +37,9 @@ test('a student is shown what was asked before, asks all the same without script
   await wren.goto('/workroom/questions');
   const waiting = wren.getByRole('article').filter({ hasText: words });
   // Older ones stand before it: only the first stands open.
-  if (!(await waiting.getByLabel('Your answer to Nell').isVisible())) await waiting.getByText(/^Answer/).first().click();
-  await waiting.getByLabel('Your answer to Nell').fill('It does, with the ends double.');
-  await waiting.getByRole('button', { name: 'Send the answer' }).click();
+  if (!(await waiting.getByLabel('Your answer to Nell').isVisible())) await pressKey(wren, waiting.getByText(/^Answer/).first());
+  await typeInto(wren, waiting.getByLabel('Your answer to Nell'), 'It does, with the ends double.');
+  await pressKey(wren, waiting.getByRole('button', { name: 'Send the answer' }));
   await expect(wren.getByText('Your answer is sent to Nell.')).toBeVisible();
   await expectFaultless(wren);
   await wren.context().close();
@@ -85,11 +86,11 @@ test('a teacher invites a helper by letter, who accepts, answers, and helps no l
   const nell = await newPerson(request, 'Nell Fane');
   const ilse = await pageOf(browser, 'ilse');
   await ilse.goto('/workroom/helpers');
-  await ilse.getByLabel('Email').fill('ilse@saltmarsh.example');
-  await press(ilse, 'Send the invitation');
+  await typeInto(ilse, ilse.getByLabel('Email'), 'ilse@saltmarsh.example');
+  await ilse.keyboard.press('Enter');
   await expect(ilse.getByLabel('Email')).toHaveAccessibleDescription(/This is your own address/);
-  await ilse.getByLabel('Email').fill(nell.email);
-  await press(ilse, 'Send the invitation');
+  await typeInto(ilse, ilse.getByLabel('Email'), nell.email);
+  await pressKey(ilse, ilse.getByRole('button', { name: 'Send the invitation' }));
   await expect(ilse.getByText(`An invitation is on its way to ${nell.email}.`)).toBeVisible();
   await expectFaultless(ilse);
   const letter = await letterTo(request, nell.email, 'Ilse Marrow asks you to help');
@@ -115,8 +116,8 @@ test('a teacher invites a helper by letter, who accepts, answers, and helps no l
   expect((await page.goto(link))?.status()).toBe(410);
 
   await ilse.goto('/workroom/helpers');
-  await press(ilse, /^End the helping of Nell Fane/);
-  await ilse.getByRole('dialog', { name: 'Nell Fane helps no longer?' }).getByRole('button', { name: 'End it' }).click();
+  await pressKey(ilse, ilse.getByRole('button', { name: /^End the helping of Nell Fane/ }));
+  await pressKey(ilse, ilse.getByRole('dialog', { name: 'Nell Fane helps no longer?' }).getByRole('button', { name: 'End it' }));
   await expect(ilse.getByText('Nell Fane helps no longer. What she answered stays.')).toBeVisible();
   await expect(ilse.getByRole('row', { name: new RegExp(`Ilse Marrow invited ${nell.email}`) })).toBeVisible();
   await ilse.context().close();

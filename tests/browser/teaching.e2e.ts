@@ -1,6 +1,7 @@
-/** A teacher makes a series from nothing, puts it before students, and takes it back. */
+/** A teacher makes a series from nothing, puts it before students, and takes it back: by finger on a phone, and by mouse without script. */
 import { randomBytes } from 'node:crypto';
-import { expect, type Page } from 'playwright/test';
+import { expect, type Locator, type Page } from 'playwright/test';
+import { press as pressKey, tabTo } from './support/by-keys.ts';
 import { stateOf } from './support/demo-people.ts';
 import { fillPiece } from './support/fill-piece.ts';
 import { expectText, fillText, textField } from './support/lesson-text.ts';
@@ -8,7 +9,11 @@ import { expectFaultless, test } from './support/test.ts';
 
 const newTitle = (): string => `Ebb ${randomBytes(3).toString('hex')}`;
 const inMain = (page: Page) => page.getByRole('main');
-const press = (page: Page, name: string | RegExp): Promise<void> => inMain(page).getByRole('button', { name, exact: true }).first().click();
+const PHONE = { viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true };
+const MOUSE = { viewport: { width: 1280, height: 900 } };
+/** By finger where there is one. */
+const hit = (page: Page, wanted: Locator): Promise<void> => (page.viewportSize()?.width === PHONE.viewport.width ? wanted.tap() : wanted.click());
+const press = (page: Page, name: string | RegExp): Promise<void> => hit(page, inMain(page).getByRole('button', { name, exact: true }).first());
 
 async function makeSeries(page: Page, title: string): Promise<string> {
   await page.goto('/workroom/series/new');
@@ -26,7 +31,7 @@ async function putInPart(page: Page, title: string): Promise<void> {
 
 async function writePart(page: Page, desk: string, title: string, words: string, withScript = true): Promise<void> {
   await page.goto(desk);
-  await page.getByRole('link', { name: title, exact: true }).click();
+  await hit(page, page.getByRole('link', { name: title, exact: true }));
   await fillText(page, words, withScript);
   await press(page, 'Save');
   await expect(inMain(page).getByText(/^Saved \d\d:\d\d$/).or(page.getByRole('status').filter({ hasText: /^Saved \d\d:\d\d$/ })).first()).toBeVisible();
@@ -42,8 +47,8 @@ async function describePiece(page: Page, desk: string, withScript: boolean): Pro
 const parts = (page: Page) => inMain(page).getByRole('region', { name: 'Parts', exact: true }).getByRole('listitem').getByRole('heading', { level: 3 });
 
 for (const javaScriptEnabled of [true, false]) {
-  test.describe(javaScriptEnabled ? 'with script' : 'without script', () => {
-    test.use({ javaScriptEnabled, storageState: stateOf('ilse') });
+  test.describe(javaScriptEnabled ? 'on a phone' : 'without script', () => {
+    test.use({ ...javaScriptEnabled ? PHONE : MOUSE, javaScriptEnabled, storageState: stateOf('ilse') });
 
     test('a series comes from nothing to its students, and back', async ({ page, browser }) => {
       test.setTimeout(150_000);
@@ -54,7 +59,7 @@ for (const javaScriptEnabled of [true, false]) {
 
       await putInPart(page, 'Weave the foot');
       await putInPart(page, 'Dress the loom');
-      await inMain(page).getByRole('button', { name: 'Move Part 2, Dress the loom up' }).click();
+      await press(page, 'Move Part 2, Dress the loom up');
       await expect(page.getByText('“Dress the loom” is now Part 1.')).toBeVisible();
       await expect(parts(page)).toHaveText(['Dress the loom', 'Weave the foot']);
 
@@ -66,28 +71,28 @@ for (const javaScriptEnabled of [true, false]) {
       await expect(inMain(page).getByText('It can be read as it stands.')).toBeVisible();
       if (javaScriptEnabled) await expectFaultless(page);
 
-      await page.getByRole('link', { name: 'Settings', exact: true }).click();
-      await page.getByLabel('Ask for a photo').check();
+      await hit(page, page.getByRole('link', { name: 'Settings', exact: true }));
+      await hit(page, page.getByLabel('Ask for a photo'));
       await page.getByLabel('What it shall show').fill('Show your warped loom');
-      await page.getByLabel('Free to read').check();
+      await hit(page, page.getByLabel('Free to read'));
       await press(page, 'Save');
       await expect(page.getByText('asks for a photo').first()).toBeVisible();
 
-      await page.getByRole('link', { name: 'To gather', exact: true }).click();
+      await hit(page, page.getByRole('link', { name: 'To gather', exact: true }));
       await page.getByLabel('Name', { exact: true }).fill('Blunt needle');
       await page.getByLabel('Or how much in words').fill('1');
       await press(page, 'Put it on the list');
       await expect(inMain(page).getByRole('listitem').filter({ hasText: 'Blunt needle' }).first()).toBeVisible();
 
       await writePart(page, desk, 'Weave the foot', '<Step id="weave">Weave eight rows.</Step>', javaScriptEnabled);
-      await page.getByRole('link', { name: 'Settings', exact: true }).click();
-      await page.getByLabel('On a date, for everybody').check();
+      await hit(page, page.getByRole('link', { name: 'Settings', exact: true }));
+      await hit(page, page.getByLabel('On a date, for everybody'));
       await page.getByLabel('Day and time').fill('2020-01-01T09:00');
       await press(page, 'Save');
       await expect(page.getByLabel('Day and time')).toHaveAccessibleDescription(/This moment has passed/);
       await expect(page.getByLabel('Day and time')).toHaveValue('2020-01-01T09:00');
       await page.getByLabel('Day and time').fill('');
-      await page.getByLabel('After you have seen a photo').check();
+      await hit(page, page.getByLabel('After you have seen a photo'));
       await page.getByLabel('It opens when you say weave on to the photo of').selectOption({ label: 'Part 1, Dress the loom' });
       await press(page, 'Save');
       await expect(page.getByText('opens after you say weave on to the photo of Part 1').first()).toBeVisible();
@@ -107,7 +112,7 @@ for (const javaScriptEnabled of [true, false]) {
       await expect(inMain(page).getByText('Nothing stands in the way.')).toBeVisible();
 
       await press(page, 'Publish');
-      await page.getByRole('dialog').getByRole('button', { name: 'Publish' }).click();
+      await hit(page, page.getByRole('dialog').getByRole('button', { name: 'Publish' }));
       await expect(inMain(page).getByText(/Open to buyers since/)).toBeVisible();
 
       const student = await browser.newContext({ storageState: stateOf('amara'), baseURL: new URL(page.url()).origin });
@@ -119,7 +124,7 @@ for (const javaScriptEnabled of [true, false]) {
       await expect(shop.getByText(/Wind \d+/)).toBeVisible();
 
       await press(page, 'Take back to draft');
-      await page.getByRole('dialog').getByRole('button', { name: 'Take back to draft' }).click();
+      await hit(page, page.getByRole('dialog').getByRole('button', { name: 'Take back to draft' }));
       await expect(inMain(page).getByText('Draft again: nobody new can buy it')).toBeVisible();
       expect((await shop.goto(address))?.status()).toBe(404);
       await student.close();
@@ -128,7 +133,7 @@ for (const javaScriptEnabled of [true, false]) {
     test('a part taken out is put back where it stood', async ({ page }) => {
       await makeSeries(page, newTitle());
       for (const title of ['One', 'Two', 'Three']) await putInPart(page, title);
-      await inMain(page).getByRole('button', { name: 'Take out Part 2, Two' }).click();
+      await press(page, 'Take out Part 2, Two');
       await expect(inMain(page).getByRole('heading', { name: 'Part 2 taken out' })).toBeVisible();
       await expect(parts(page)).toHaveText(['One', 'Three']);
       await press(page, 'Put it back');
@@ -139,7 +144,7 @@ for (const javaScriptEnabled of [true, false]) {
     test('of two windows none writes over the other unasked', async ({ page, context }) => {
       const desk = await makeSeries(page, newTitle());
       await putInPart(page, 'One');
-      await page.getByRole('link', { name: 'One', exact: true }).click();
+      await hit(page, page.getByRole('link', { name: 'One', exact: true }));
       const other = await context.newPage();
       await other.goto(page.url());
       await writePart(other, desk, 'One', 'Theirs.', javaScriptEnabled);
@@ -153,11 +158,11 @@ for (const javaScriptEnabled of [true, false]) {
       await expectText(page, 'Mine.', javaScriptEnabled);
 
       // The text that was written over is among the earlier ones, and is taken up again.
-      await page.getByRole('link', { name: 'Versions', exact: true }).click();
+      await hit(page, page.getByRole('link', { name: 'Versions', exact: true }));
       await page.getByLabel('From').selectOption({ index: 1 });
       await press(page, 'Compare');
       await expect(inMain(page).getByRole('region', { name: 'What changed', exact: true }).last()).toContainText('Theirs.');
-      await inMain(page).getByRole('listitem').filter({ hasText: 'Set aside' }).getByRole('button', { name: /Take it up again/ }).click();
+      await hit(page, inMain(page).getByRole('listitem').filter({ hasText: 'Set aside' }).getByRole('button', { name: /Take it up again/ }));
       await expect(page.getByText('Taken up again. The text that stood here is kept among the versions.')).toBeVisible();
       await expectText(page, 'Theirs.', javaScriptEnabled);
     });
@@ -170,7 +175,7 @@ test.describe('by keyboard alone', () => {
   test('a part moves up step by step, and an amount is put in from the plan', async ({ page }) => {
     await makeSeries(page, newTitle());
     for (const title of ['One', 'Two', 'Three']) await putInPart(page, title);
-    await inMain(page).getByRole('button', { name: 'Move Part 3, Three up' }).focus();
+    await tabTo(page, inMain(page).getByRole('button', { name: 'Move Part 3, Three up' }));
     for (const order of [['One', 'Three', 'Two'], ['Three', 'One', 'Two']]) {
       await page.keyboard.press('Enter');
       await expect(parts(page)).toHaveText(order);
@@ -178,9 +183,9 @@ test.describe('by keyboard alone', () => {
     await expect(page.locator(':focus')).toHaveAccessibleName('Part 1, Three is first already');
 
     await page.goto('/workroom/series/low-tide');
-    await page.getByRole('link', { name: 'Off the loom', exact: true }).focus();
-    await page.keyboard.press('Enter');
-    await page.getByRole('combobox', { name: 'Amount from the plan' }).focus();
+    await pressKey(page, page.getByRole('link', { name: 'Off the loom', exact: true }));
+    await expect(textField(page)).toBeVisible();
+    await tabTo(page, page.getByRole('combobox', { name: 'Amount from the plan' }));
     await page.keyboard.type('Hanging cord');
     await page.keyboard.press('Enter');
     await expect(textField(page)).toBeFocused();

@@ -1,5 +1,6 @@
 /** Writing a part in the real editor: hostile texts, suggestions by keyboard, a lost line, a long text. */
 import { expect, type Page } from 'playwright/test';
+import { press, tabTo } from './support/by-keys.ts';
 import { stateOf } from './support/demo-people.ts';
 import { expectText, fillText, textField } from './support/lesson-text.ts';
 import { expectFaultless, test } from './support/test.ts';
@@ -38,24 +39,28 @@ const HOSTILE: readonly (readonly [source: string, reason: RegExp])[] = [
   ['Wind \u202E38 ends', /writing direction/],
 ];
 
-test('hostile texts typed into the editor run nowhere and are told with line and reason', async ({ page }) => {
-  test.setTimeout(120_000);
-  page.on('dialog', (dialog) => { throw new Error(`a dialog opened: ${dialog.message()}`); });
-  await openNewPart(page);
-  for (const [source, reason] of HOSTILE) {
-    await fillText(page, `Take the frame.\n\n${source}`);
-    await expect(remarks(page).getByText(reason).first()).toBeVisible();
-    await expect(remarks(page).getByRole('link', { name: 'Line 3' }).first()).toBeVisible();
-  }
-  await fillText(page, 'Take the frame.');
-  await expect(remarks(page).getByText('It can be read as it stands.')).toBeVisible();
-  await expectFaultless(page);
+test.describe('on a phone', () => {
+  test.use({ viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true });
+
+  test('hostile texts typed into the editor run nowhere and are told with line and reason', async ({ page }) => {
+    test.setTimeout(120_000);
+    page.on('dialog', (dialog) => { throw new Error(`a dialog opened: ${dialog.message()}`); });
+    await openNewPart(page);
+    for (const [source, reason] of HOSTILE) {
+      await fillText(page, `Take the frame.\n\n${source}`);
+      await expect(remarks(page).getByText(reason).first()).toBeVisible();
+      await expect(remarks(page).getByRole('link', { name: 'Line 3' }).first()).toBeVisible();
+    }
+    await fillText(page, 'Take the frame.');
+    await expect(remarks(page).getByText('It can be read as it stands.')).toBeVisible();
+    await expectFaultless(page);
+  });
 });
 
 test('by keyboard alone: a step and an amount from the palette, a remark, and out by Tab', async ({ page }) => {
   await page.goto('/workroom/series/low-tide');
-  await page.getByRole('link', { name: 'First rows of tabby', exact: true }).click();
-  await textField(page).focus();
+  await press(page, page.getByRole('link', { name: 'First rows of tabby', exact: true }));
+  await tabTo(page, textField(page));
   await page.keyboard.press('Control+End');
   await page.keyboard.type('\n\n/step');
   await expect(page.getByRole('option', { name: /Step to tick/ })).toBeVisible();
@@ -73,8 +78,8 @@ test('by keyboard alone: a step and an amount from the palette, a remark, and ou
   await page.keyboard.press('Tab');
   await expect(textField(page)).not.toBeFocused();
   // What stood here before stands again, so that other journeys find it.
-  await page.getByRole('link', { name: 'Versions', exact: true }).click();
-  await inMain(page).getByRole('button', { name: /Take it up again.*Version/ }).first().click();
+  await press(page, page.getByRole('link', { name: 'Versions', exact: true }));
+  await press(page, inMain(page).getByRole('button', { name: /Take it up again.*Version/ }).first());
   await expect(page.getByText(/Taken up again/)).toBeVisible();
 });
 
