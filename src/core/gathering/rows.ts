@@ -89,11 +89,16 @@ function materialOf(key: string | null, made: MadeFor | null): Material | undefi
 
 const yarnsOf = (piece: Piece): Readonly<Record<string, Yarn | undefined>> => ('yarns' in piece ? piece.yarns : {});
 
+function patternYarnOf({ key, role }: Material, pattern: Piece): Yarn | undefined {
+  if (role !== undefined) return yarnsOf(pattern)[role];
+  return key === 'warp' && pattern.craft === 'frame-loom' ? pattern.warp.yarn : undefined;
+}
+
 function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
   const { made, pattern, units } = shownFor;
   const material = line.kind === 'yarn' ? materialOf(line.amountKey, made) : undefined;
   const yarn = material?.yarn;
-  const patternYarn = material?.role === undefined || pattern === null ? undefined : yarnsOf(pattern)[material.role];
+  const patternYarn = pattern === null || material === undefined ? undefined : patternYarnOf(material, pattern);
   return {
     key: line.publicIds.join('.'),
     items: line.publicIds,

@@ -2,7 +2,7 @@
  * A student's own making beside the pattern: loom, width, ends and yarns, reckoned and drawn as she types. Without script
  * it is a form; the answer is the same, because the same core gives it.
  */
-import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState } from 'react';
+import { useDeferredValue, useEffect, useMemo, useReducer, useRef, useState, type ReactNode } from 'react';
 import { judgeMine } from '#core/craft/my-piece/judge-mine.ts';
 import type { KeptPiece } from '#core/craft/my-piece/judge-woven.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
@@ -32,9 +32,11 @@ export interface MyPieceProps {
   /** What the server said of the form as it was sent, by field. */
   readonly errors: Readonly<Record<string, string>>;
   readonly action: string;
+  /** How wraps are measured, drawn by the page. */
+  readonly guide?: ReactNode;
 }
 
-export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, revision, errors, action }: MyPieceProps) {
+export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, revision, errors, action, guide }: MyPieceProps) {
   const [typed, change] = useReducer(mineAfter, before);
   const [alive, setAlive] = useState(false);
   const form = useRef<HTMLFormElement>(null);
@@ -56,7 +58,7 @@ export function MyPiece({ slug, name, teacher, pattern, typed: before, kept, rev
         <input type="hidden" name="revision" value={revision} />
         <LoomFields {...{ typed, pattern, faults, change, alive }} />
         <WayFields typed={settled} chosen={typed} {...{ pattern, name, change, faults }} asPattern={planned.ok ? { piece: pattern, plan: planned.value } : null} />
-        <YarnFields {...{ typed, pattern, faults, change, alive }} fitted={judged.ok ? judged.fitted : null} />
+        <YarnFields {...{ typed, pattern, faults, change, alive, guide }} fitted={judged.ok ? judged.fitted : null} />
         <WovenFields {...{ typed, faults, change }} piece={woven?.piece ?? pattern} plan={woven?.plan ?? null} />
         <div className="row">
           <Button type="submit" kind="act">Keep my piece</Button>

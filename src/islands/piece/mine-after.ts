@@ -1,5 +1,5 @@
 // What can be done to the typed form, apart from any screen.
-import { LEAVE_OUT, WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
+import { LEAVE_OUT, WARP_YARN, WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import type { WayId } from '#core/craft/fitting/ways-to-fit.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
@@ -8,7 +8,8 @@ import type { Units } from '#core/units/units.ts';
 export type MineEvent =
   | { readonly kind: 'type'; readonly key: string; readonly text: string }
   | { readonly kind: 'leave-out'; readonly key: string; readonly isOut: boolean }
-  | { readonly kind: 'type-yarn'; readonly role: string; readonly key: string; readonly text: string }
+  /** `role` is null for the warp. */
+  | { readonly kind: 'type-yarn'; readonly role: string | null; readonly key: string; readonly text: string }
   | { readonly kind: 'units'; readonly units: Units }
   | { readonly kind: 'as-pattern'; readonly pattern: FrameLoomPiece };
 
@@ -16,6 +17,7 @@ export type MineEvent =
 export function eventOfField(typed: TypedMine, name: string, text: string): MineEvent {
   if (name === 'units') return { kind: 'units', units: text === 'in' ? 'in' : 'cm' };
   if (name.startsWith(LEAVE_OUT)) return { kind: 'leave-out', key: name, isOut: text !== '' };
+  if (name.startsWith(WARP_YARN)) return { kind: 'type-yarn', role: null, key: name.slice(WARP_YARN.length), text };
   const role = Object.keys(typed.yarns).find((one) => name.startsWith(`yarns.${one}.`));
   return role === undefined ? { kind: 'type', key: name, text } : { kind: 'type-yarn', role, key: name.slice(`yarns.${role}.`.length), text };
 }
@@ -28,6 +30,7 @@ export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
       // Who ticks a band means to choose for herself.
       return { ...typed, texts: { ...typed.texts, [WAY_KEY]: 'leave-chosen' satisfies WayId, [event.key]: event.isOut ? 'yes' : '' } };
     case 'type-yarn':
+      if (event.role === null) return { ...typed, warpYarn: { ...typed.warpYarn, [event.key]: event.text } };
       return { ...typed, yarns: { ...typed.yarns, [event.role]: { ...yarnOf(typed, event.role), [event.key]: event.text } } };
     case 'units':
       return inOtherUnits(typed, event.units);

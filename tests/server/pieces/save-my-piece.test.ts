@@ -73,6 +73,7 @@ describe('a student’s own piece', () => {
     await refused({ widthMm: '25' }).toMatchObject({ code: 'VALIDATION', fields: { widthMm: expect.stringContaining('the piece keeps its width') } });
     await refused({ endsTogether: '1' }).toMatchObject({ fields: { endsTogether: expect.stringContaining('The cloth is begun') } });
     await refused({ nailPitchMm: '10' }).toMatchObject({ fields: { nailPitchMm: expect.stringContaining('stay as far apart as they are') } });
+    await refused({ 'warp.yarn.by': 'tex', 'warp.yarn.grist': '200' }).toMatchObject({ fields: { 'warp.yarn.grist': expect.stringContaining('stays the yarn it is') } });
     await refused({ asPattern: 'yes' }).toMatchObject({ code: 'VALIDATION' });
     expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ revision: 1, data: { widthMm: 300 }, woven: { bandsDone: 6 } });
   });

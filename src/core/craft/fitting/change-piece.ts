@@ -7,6 +7,7 @@ import { holderStep, loomKind } from '#core/craft/looms/looms.ts';
 import { scalePiece } from '#core/craft/fitting/scale-piece.ts';
 import type { FitWay } from '#core/craft/fitting/way.ts';
 import { isAboveZero, widen } from '#core/craft/fitting/widen.ts';
+import { present } from '#core/craft/reading/present.ts';
 import type { Loom, FrameLoomPiece, Warp, Yarn } from '#core/craft/piece.ts';
 
 /**
@@ -40,18 +41,19 @@ const keepsEnds = (way: FitWay | undefined): boolean => way === undefined || (wa
 
 /** The pattern pins its ends for its own loom; on another one they are reckoned anew. */
 function changeWarp({ endCount, ...warp }: Warp, mine: MyPiece): Warp {
-  const own = { ...warp, ...(mine.endsTogether === undefined ? {} : { endsTogether: mine.endsTogether }) };
+  const own = { ...warp, ...present({ yarn: mine.warpYarn && inColourOf(warp.yarn, mine.warpYarn), endsTogether: mine.endsTogether }) };
   const { kind, nailRows, nailPitchMm, warping } = mine.loom ?? {};
   const asPinned = [mine.widthMm, mine.endsTogether, kind, nailRows, nailPitchMm, warping].every((own) => own === undefined);
   return endCount !== undefined && asPinned && keepsEnds(mine.way) ? { ...own, endCount } : own;
 }
 
 /** Her yarn takes the pattern's colour where she has not said her own, so that the picture stays readable. */
+const inColourOf = ({ colour }: Yarn, own: Yarn): Yarn => (colour === undefined ? own : { colour, ...own });
+
 function changeYarns(pattern: FrameLoomPiece['yarns'], mine: NonNullable<MyPiece['yarns']>): FrameLoomPiece['yarns'] {
   const entries = Object.entries(pattern).map(([role, patternYarn]): [string, Yarn] => {
     const own = Object.hasOwn(mine, role) ? mine[role] : undefined;
-    if (own === undefined) return [role, patternYarn];
-    return [role, patternYarn.colour === undefined ? own : { colour: patternYarn.colour, ...own }];
+    return [role, own === undefined ? patternYarn : inColourOf(patternYarn, own)];
   });
   return Object.fromEntries(entries);
 }

@@ -22,6 +22,8 @@ export interface MyPiece {
   };
   readonly widthMm?: number;
   readonly endsTogether?: EndsTogether;
+  /** Her own yarn for the warp. */
+  readonly warpYarn?: Yarn;
   /** Her own yarn in a role of the pattern. */
   readonly yarns?: Readonly<Record<string, Yarn>>;
   /** Her own cord in a role of a knotted pattern. */
@@ -43,6 +45,7 @@ export function checkMine(mine: unknown, findings: Findings): void {
   loom?.optionalChoice('nailRows', 'Rows of nails', NAIL_ROW_NAMES);
   fields.take('widthMm');
   fields.take('endsTogether');
+  fields.optionalGroup('warpYarn', 'Warp yarn');
   const yarns = fields.optionalGroup('yarns', 'The group of yarns');
   for (const [role] of yarns?.entries() ?? []) yarns?.group(role, 'Yarn');
   const cords = fields.optionalGroup('cords', 'The group of cords');

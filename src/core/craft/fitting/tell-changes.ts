@@ -110,6 +110,8 @@ function tellWarp(before: Made, after: Made, tellLength: TellLength): string[] {
   if (after.plan.ends.count !== before.plan.ends.count) {
     told.push(`There are ${String(after.plan.ends.count)} ends instead of ${String(before.plan.ends.count)}.`);
   }
+  const yarn = after.piece.warp.yarn;
+  if (JSON.stringify(yarn) !== JSON.stringify(before.piece.warp.yarn)) told.push(`${yarn.label ?? 'Your own yarn'} is the warp.`);
   return told;
 }
 

@@ -1,7 +1,7 @@
 /** What a student is asked about her own making. What she leaves empty stays as in the pattern. */
 import { option, type Asked } from '#core/craft/piece-form/asked.ts';
 import { LOOM_KIND as KIND_OF_PIECE, NAIL_ROWS as ROWS_OF_PIECE } from '#core/craft/piece-form/asked-of-piece.ts';
-import { BY, COLOUR, LABEL, STRANDS, WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
+import { BALL, BY, COLOUR, LABEL, STRANDS, WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
 import type { Units } from '#core/units/units.ts';
 
 /** What is plausible for a frame with nails, in mm for each family of units, with round numbers in both. */
@@ -52,11 +52,13 @@ export const WAY_KEY = 'way';
 /** Fields of bands she would rather leave out: `leaveOut.<key of the band>`. */
 export const LEAVE_OUT = 'leaveOut.';
 
-/** Her yarn is said in the ways a label says it, or by wraps where there is none. */
+/** Her yarn is said in any way a label may say it, or by wraps where there is none. */
 export const AS_PATTERN = 'pattern';
-const WAYS: ReadonlySet<string> = new Set(['metresPer100g', 'tex', 'nm', 'ne-cotton', 'ne-worsted', 'wraps', 'class']);
-export const YARN_BY = [{ text: AS_PATTERN, label: 'As in the pattern' }, ...(BY.kind === 'choice' ? BY.options.filter(({ text }) => WAYS.has(text)) : [])] as const;
+export const YARN_BY = [{ text: AS_PATTERN, label: 'As in the pattern' }, ...(BY.kind === 'choice' ? BY.options : [])] as const;
+
+/** Fields of her own warp yarn: `warp.yarn.<key>`; those of the others are `yarns.<role>.<key>`. */
+export const WARP_YARN = 'warp.yarn.';
 
 /** Besides the way and its number. */
-export const YARN_TEXTS: readonly Asked[] = [WRAPS, STRANDS, COLOUR, LABEL];
+export const YARN_TEXTS: readonly Asked[] = [WRAPS, STRANDS, COLOUR, LABEL, ...BALL];
 export const YARN_KEYS: readonly string[] = ['by', 'grist', ...YARN_TEXTS.map(({ key }) => key)];

@@ -13,7 +13,7 @@ import { present } from '#core/craft/reading/present.ts';
 import type { Outcome, Problem } from '#core/outcome.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
-import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, YARN_KEYS, type AskedLength } from './asked-of-mine.ts';
+import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARP_YARN, WARPING, WAY_KEY, WIDTH, YARN_KEYS, type AskedLength } from './asked-of-mine.ts';
 import { isTold, judgeWoven, NOTHING_KEPT, wovenFieldOf, type Halfway, type KeptPiece } from './judge-woven.ts';
 import { isOwnYarn, leftOutBy, wayOf, yarnOf, type TypedMine } from './typed-mine.ts';
 import { readTypedWoven } from './typed-woven.ts';
@@ -100,17 +100,18 @@ function readMine(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string,
     nailRows: nailRows === (pattern.loom.nailRows ?? 'both') ? undefined : nailRows,
     warping: warping === pattern.loom.warping ? undefined : warping,
   });
-  const yarns = readYarns(typed, pattern, faults);
+  const { warpYarn, yarns } = readYarns(typed, pattern, faults);
   return present({
     loom: Object.keys(loom).length === 0 ? undefined : loom,
     widthMm: length(WIDTH),
     endsTogether: together === (pattern.warp.endsTogether ?? 1) ? undefined : together,
+    warpYarn,
     yarns: Object.keys(yarns).length === 0 ? undefined : yarns,
   });
 }
 
 /** What she chose in words; a way of winding that her kind of loom does not take, or rows it does not have, go unheard. */
-export function chosenLoom({ texts }: TypedMine): { readonly kind?: LoomKindName; readonly nailRows?: NailRows; readonly warping?: Warping } {
+export function chosenLoom({ texts }: Pick<TypedMine, 'texts'>): { readonly kind?: LoomKindName; readonly nailRows?: NailRows; readonly warping?: Warping } {
   const kind = LOOM_KIND_NAMES.find((name) => name === textOf(texts, LOOM_KIND.key));
   const { rows, warpings } = loomKind(present({ kind }));
   return present({
@@ -123,18 +124,21 @@ export function chosenLoom({ texts }: TypedMine): { readonly kind?: LoomKindName
 const endsOf = (text: string): EndsTogether | undefined => (text === '2' ? 2 : text === '1' ? 1 : undefined);
 
 /** Her own yarns, read as those of any piece are. */
-function readYarns(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): NonNullable<MyPiece['yarns']> {
+function readYarns(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): Pick<MyPiece, 'warpYarn'> & Required<Pick<MyPiece, 'yarns'>> {
   const roles = Object.keys(pattern.yarns).filter((role) => isOwnYarn(yarnOf(typed, role)));
   const rows = roles.map((role, id) => ({ id, texts: { ...yarnOf(typed, role), role } }));
-  const { piece, faults: found } = readTyped({ units: typed.units, texts: {}, warpYarn: {}, yarns: rows, bands: [] });
-  for (const { id, texts } of rows) {
+  const { piece, faults: found } = readTyped({ units: typed.units, texts: {}, warpYarn: typed.warpYarn, yarns: rows, bands: [] });
+  const hasOwnWarp = isOwnYarn(typed.warpYarn);
+  const places = [...rows.map(({ id, texts }) => [`yarns.${String(id)}.`, `yarns.${texts.role}.`] as const), ...(hasOwnWarp ? [[WARP_YARN, WARP_YARN] as const] : [])];
+  for (const [from, to] of places) {
     for (const key of YARN_KEYS) {
-      const fault = found.get(`yarns.${String(id)}.${key}`);
-      if (fault !== undefined) faults.set(`yarns.${texts.role}.${key}`, fault.says);
+      const fault = found.get(`${from}${key}`);
+      if (fault !== undefined) faults.set(`${to}${key}`, fault.says);
     }
   }
   // Whatever was typed goes on as it is: reckoning it tells what is wrong with it.
-  return (piece as { yarns: NonNullable<MyPiece['yarns']> }).yarns;
+  const { warp, yarns } = piece as { warp: { yarn: NonNullable<MyPiece['warpYarn']> }; yarns: NonNullable<MyPiece['yarns']> };
+  return { yarns, ...(hasOwnWarp ? { warpYarn: warp.yarn } : {}) };
 }
 
 const FIELD_OF: Readonly<Record<string, string>> = {
@@ -155,9 +159,11 @@ const FIELD_OF: Readonly<Record<string, string>> = {
 function fieldOf(path: string, pattern: FrameLoomPiece): string {
   const known = FIELD_OF[path] ?? wovenFieldOf(path);
   if (known !== undefined) return known;
-  const [, first, role = '', key = ''] = path.split('/');
+  const [, first, role = '', ...keys] = path.split('/');
+  const key = YARN_KEYS.find((known) => known === keys.join('.')) ?? (keys[0] === 'ball' ? 'ball.metres' : 'grist');
+  if (first === 'warp' && role === 'yarn') return `${WARP_YARN}${key}`;
   if (first !== 'yarns' || !Object.hasOwn(pattern.yarns, role)) return '';
-  return `yarns.${role}.${YARN_KEYS.includes(key) ? key : 'grist'}`;
+  return `yarns.${role}.${key}`;
 }
 
 /** With the names of their fields, each sentence once a field. */

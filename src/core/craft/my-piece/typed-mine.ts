@@ -9,18 +9,19 @@ import type { FrameLoomPiece, Yarn } from '#core/craft/piece.ts';
 import { fieldText, readText } from '#core/craft/piece-form/field-text.ts';
 import { DEFAULT_KIND } from '#core/craft/looms/looms.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
-import { gristTexts } from '#core/craft/piece-form/type-piece.ts';
+import { gristTexts, textsOf } from '#core/craft/piece-form/type-piece.ts';
 import { NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
-import { AS_PATTERN, CHOICES, ENDS, LEAVE_OUT, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARPING, WAY_KEY, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+import { AS_PATTERN, CHOICES, ENDS, LEAVE_OUT, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARP_YARN, WARPING, WAY_KEY, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
 import { typeWoven, wovenAsked, wovenTexts } from './typed-woven.ts';
 
 export interface TypedMine {
   /** Those of lengths that name no unit themselves. */
   readonly units: Units;
   readonly texts: Texts;
+  readonly warpYarn: Texts;
   /** By role of the pattern, in its order. */
   readonly yarns: Readonly<Record<string, Texts>>;
 }
@@ -50,8 +51,7 @@ function wayTexts({ way }: MyPiece): Texts {
 function yarnTexts(own: Yarn | undefined, pattern: Yarn, units: Units): Texts {
   // Until she says otherwise, her yarn is as many strands of the same colour.
   if (own === undefined) return { by: AS_PATTERN, colour: pattern.colour ?? '', strands: pattern.strands === undefined ? '' : String(pattern.strands) };
-  const traits = Object.fromEntries(YARN_TEXTS.map((asked) => [asked.key, fieldText(Reflect.get(own, asked.key), asked, units)]));
-  return { ...traits, ...gristTexts(own) };
+  return { ...textsOf(own, YARN_TEXTS, units), ...gristTexts(own) };
 }
 
 /** What she kept, in the words and units of her form. */
@@ -69,6 +69,7 @@ export function typeMine(mine: MyPiece, pattern: FrameLoomPiece, units: Units, w
       ...wayTexts(mine),
       ...typeWoven(woven, pattern, units),
     },
+    warpYarn: yarnTexts(mine.warpYarn, pattern.warp.yarn, units),
     yarns: Object.fromEntries(Object.entries(pattern.yarns).map(([role, yarn]) => [role, yarnTexts(mine.yarns?.[role], yarn, units)])),
   };
 }
@@ -78,10 +79,12 @@ const MOST_TYPED = 200;
 /** The form as it was sent; what is missing is empty. `ask` gives the text under a name. */
 export function mineOfFields(ask: (name: string) => string | undefined, pattern: FrameLoomPiece): TypedMine {
   const text = (name: string): string => (ask(name) ?? '').slice(0, MOST_TYPED);
+  const yarn = (prefix: string): Texts => Object.fromEntries(YARN_KEYS.map((key) => [key, text(`${prefix}${key}`)]));
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
     texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), WAY_KEY, ...leaveOutNames(pattern), ...wovenAsked(pattern).map(({ key }) => key)].map((key) => [key, text(key)])),
-    yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, Object.fromEntries(YARN_KEYS.map((key) => [key, text(`yarns.${role}.${key}`)]))])),
+    warpYarn: yarn(WARP_YARN),
+    yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, yarn(`yarns.${role}.`)])),
   };
   // Without script she chooses other units and sends the form in one go; what she typed belongs to what she saw.
   return inOtherUnits(typed, ask('units') === 'in' ? 'in' : 'cm');

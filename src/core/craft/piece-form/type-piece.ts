@@ -13,7 +13,8 @@ function valueAt(owner: unknown, key: string): unknown {
   return key.split('.').reduce<unknown>((value, name) => (typeof value === 'object' && value !== null && Object.hasOwn(value, name) ? Reflect.get(value, name) : undefined), owner);
 }
 
-function textsOf(owner: unknown, asked: readonly Asked[], units: Units): Record<string, string> {
+/** By the key of each, which may be dotted. */
+export function textsOf(owner: unknown, asked: readonly Asked[], units: Units): Record<string, string> {
   return Object.fromEntries(asked.map((one) => [one.key, fieldText(valueAt(owner, one.key), one, units)]));
 }
 

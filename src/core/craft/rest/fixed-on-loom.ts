@@ -8,6 +8,9 @@ const SAME_MM = 0.01;
 const differs = (a: number, b: number): boolean => Math.abs(a - b) > SAME_MM;
 const NEW_WARP = 'To change it, cut this piece off and wind a new warp: say then that nothing is woven yet.';
 
+/** What may be said of a yarn in other words while it stays the same. */
+const UNSEEN = { label: undefined, colour: undefined, ball: undefined, fibre: undefined };
+
 /** Without what makes no difference to cloth that is woven already. */
 const cloth = (band: Band): string => JSON.stringify({ ...band, fill: undefined, heightMm: undefined });
 
@@ -26,6 +29,9 @@ export function refuseChanges(before: Made, after: Made, woven: WovenSoFar): rea
   }
   if ((before.piece.warp.endsTogether ?? 1) !== (after.piece.warp.endsTogether ?? 1)) {
     refuse('/warp/endsTogether', `The cloth is begun, so its ends are worked on as they are. ${NEW_WARP}`);
+  }
+  if (JSON.stringify({ ...before.piece.warp.yarn, ...UNSEEN }) !== JSON.stringify({ ...after.piece.warp.yarn, ...UNSEEN })) {
+    refuse('/warp/yarn', `The warp is on the loom, so it stays the yarn it is. ${NEW_WARP}`);
   }
   const begun = woven.bandsDone + ((woven.rows ?? 0) > 0 ? 1 : 0);
   const [was, is] = [before, after].map(({ piece }) => piece.bands.slice(0, begun).map(cloth).join());

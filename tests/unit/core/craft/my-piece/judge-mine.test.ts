@@ -83,6 +83,35 @@ describe('her own yarn', () => {
     expect(yarn(by, grist)).toMatchObject({ ok: true, mine: { yarns: { water: expected } } });
   });
 
+  // 300 tex: grams in a kilometre, a tenth of them in 100 m, nine and ten times as many in nine and ten kilometres; and
+  // 590.541, 885.811, 1653.515, 310.034 and 1937.7 over it, as the hanks of 840, 560, 300, 1600 and 256 yards in a pound.
+  test.each([
+    ['tex', '300'], ['metresPer100g', '333.333'], ['nm', '3.33333'], ['denier', '2700'], ['dtex', '3000'], ['ne-cotton', '1.96847'], ['ne-worsted', '2.95270'],
+    ['lea', '5.51172'], ['run', '1.03345'], ['yorkshire', '6.45900'], ['jute', '8.70766'],
+  ])('of one thickness takes one length and weight, also by %s', (by, grist) => {
+    const [mine, asTex] = [yarn(by, grist), yarn('tex', '300')];
+    const of = (judged: typeof mine) => (judged.ok ? judged.fitted.plan.yarns['water'] : undefined);
+    expect(of(mine)?.netMm).toBeCloseTo(of(asTex)?.netMm ?? 0, -1);
+    expect(of(mine)?.massG).toBeCloseTo(of(asTex)?.massG ?? 0, 1);
+  });
+
+  test('may be the warp, which no other yarn’s amount but its own take-up follows', () => {
+    const judged = judge({ 'warp.yarn.by': 'tex', 'warp.yarn.grist': '200', 'warp.yarn.label': 'Attic twine' });
+    expect(judged).toMatchObject({ ok: true, mine: { warpYarn: { tex: 200, label: 'Attic twine' } } });
+    expect(judged.ok && judged.fitted.plan.warp.massG / judged.fitted.plan.warp.netMm).toBeCloseTo(200 / 1e6, 12);
+    expect(judged.ok && judged.fitted.changes).toContain('Attic twine is the warp.');
+    expect(says({ 'warp.yarn.by': 'tex', 'warp.yarn.grist': '1e9' })['warp.yarn.grist']).toContain('works');
+    expect(says({ 'warp.yarn.by': 'nm', 'warp.yarn.grist': '' })).toEqual({ 'warp.yarn.grist': expect.stringContaining('missing') });
+  });
+
+  test('with a ball of its own is rounded up to whole balls; half a ball’s label is asked for the other half', () => {
+    const balls = { 'yarns.water.ball.metres': '50', 'yarns.water.ball.grams': '25' };
+    const judged = yarn('tex', '300', balls);
+    const of = judged.ok ? judged.fitted.plan.yarns['water'] : undefined;
+    expect(of?.balls).toBe(Math.ceil((of?.withMarginMm ?? 0) / 50_000));
+    expect(Object.keys(says({ 'yarns.water.by': 'tex', 'yarns.water.grist': '300', 'yarns.water.ball.metres': '50' }))).toEqual(['yarns.water.ball.grams']);
+  });
+
   test('by wraps alone, where there is no label', () => {
     const judged = yarn('wraps', '', { 'yarns.water.wrapsPerInch': '16' });
     expect(judged).toMatchObject({ ok: true, mine: { yarns: { water: { wrapsPerInch: 16 } } } });
@@ -212,7 +241,7 @@ describe('a piece that is half woven', () => {
 });
 
 describe('what she chose of her loom', () => {
-  const chosen = (texts: Fields) => chosenLoom({ units: 'cm', texts, yarns: {} });
+  const chosen = (texts: Fields) => chosenLoom({ texts });
 
   test('is heard where her kind of loom has it', () => {
     expect(chosen({ kind: 'two-row-frame', nailRows: 'inner', warping: 'zigzag' })).toEqual({ kind: 'two-row-frame', nailRows: 'inner', warping: 'zigzag' });
@@ -233,7 +262,7 @@ describe('what she chose of her loom', () => {
 });
 
 test.each([
-  ['/warp/endsTogether', 'endsTogether'], ['/warp/parity', 'endsTogether'], ['/warp/endCount', 'endsTogether'], ['/warp/yarn', ''],
+  ['/warp/endsTogether', 'endsTogether'], ['/warp/parity', 'endsTogether'], ['/warp/endCount', 'endsTogether'], ['/warp/yarn', 'warp.yarn.grist'],
   ['/yarns/water', 'yarns.water.grist'], ['/yarns/water/tex', 'yarns.water.grist'], ['/yarns/water/strands', 'yarns.water.strands'], ['/yarns/water/wrapsPerInch', 'yarns.water.wrapsPerInch'],
   ['/yarns/ash/tex', ''], ['/yarns', ''], ['/bands/water/strands', ''], ['/bands', 'way'], ['/loom', 'way'], ['/loom/kind', 'kind'], ['/size/widthMm', 'widthMm'], ['/size/heightMm', ''], ['/rows', 'woven.rows'],
 ])('what is said of %s stands at the field “%s”, once', (path, field) => {

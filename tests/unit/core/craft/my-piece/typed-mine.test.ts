@@ -7,7 +7,7 @@ const pattern = await lowTide();
 const typed = (fields: Readonly<Record<string, string>>) => mineOfFields((name) => fields[name], pattern);
 
 test('what was kept comes back as it was typed, number for number', () => {
-  const mine = { loom: { insideWidthMm: 377.825, nailPitchMm: 8, warping: 'two-nail' }, widthMm: 200, endsTogether: 2, yarns: { ridge: { label: 'Attic', tex: 250, strands: 3, colour: '#112233' } } } as const;
+  const mine = { loom: { insideWidthMm: 377.825, nailPitchMm: 8, warping: 'two-nail' }, widthMm: 200, endsTogether: 2, warpYarn: { count: { text: '8/2', system: 'ne-cotton' }, ball: { metres: 90, grams: 50 } }, yarns: { ridge: { label: 'Attic', tex: 250, strands: 3, colour: '#112233' } } } as const;
   for (const units of ['cm', 'in'] as const) {
     const judged = judgeMine(typeMine(mine, pattern, units), pattern);
     expect(judged.ok && judged.mine).toEqual(mine);
