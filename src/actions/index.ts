@@ -3,6 +3,7 @@ import { bench } from './bench.ts';
 import { checkout } from './checkout.ts';
 import { following } from './following.ts';
 import { helpers } from './helpers.ts';
+import { looms } from './looms.ts';
 import { notices } from './notices.ts';
 import { office } from './office.ts';
 import { people } from './people.ts';
@@ -12,4 +13,4 @@ import { reviews } from './reviews.ts';
 import { videos } from './videos.ts';
 import { workroom } from './workroom.ts';
 
-export const server = { bench, checkout, following, helpers, notices, office, people, pieces, questions, reviews, videos, workroom };
+export const server = { bench, checkout, following, helpers, looms, notices, office, people, pieces, questions, reviews, videos, workroom };

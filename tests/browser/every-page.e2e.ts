@@ -18,6 +18,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/': [['visitor', '/']],
   '/404': [['visitor', '/nothing-here']],
   '/account': [['maud', '/account']],
+  '/account/looms': [['maud', '/account/looms']],
   '/confirm/[token]': [['visitor', '/confirm/x']],
   '/forgotten': [['visitor', '/forgotten']],
   '/handbook': [['visitor', '/handbook']],

@@ -34,11 +34,20 @@ test('a piece on the loom: the rest of it is reckoned and kept, and what is wove
     await expect(field(page, 'woven.bandsDone')).toHaveValue('7');
   });
 
+  await test.step('the list and the text are those of what is still to weave, and say so', async () => {
+    await page.goto('/series/low-tide/gather');
+    await expect(page.getByText(/^You said that 7 of 14 bands are woven: yarn is listed for what is still to weave/).first()).toBeAttached();
+    await expect(page.getByText('On the loom', { exact: true }).first()).toBeVisible();
+    await page.goto('/series/low-tide/1');
+    await expect(page.getByText(/the rest is reckoned anew with the .* rows in a centimetre you measured/)).toBeVisible();
+  });
+
   await test.step('without script, the width is refused at its field, and everything typed stays', async () => {
     const context = await browser.newContext({ storageState: await page.context().storageState(), javaScriptEnabled: false });
     const plain = await context.newPage();
     await plain.goto(MY_PIECE);
     await field(plain, 'widthMm').fill('30');
+    await field(plain, 'loomName').fill('Kitchen frame');
     await plain.getByRole('button', { name: 'Keep my piece' }).click();
     await expect(plain.getByRole('alert')).toContainText('the piece keeps its width');
     await expect(field(plain, 'widthMm')).toHaveAttribute('aria-invalid', 'true');
@@ -50,6 +59,11 @@ test('a piece on the loom: the rest of it is reckoned and kept, and what is wove
     await plain.getByRole('button', { name: 'Keep my piece' }).click();
     await expect(plain.getByText('What is woven stays as it is; the rest is reckoned anew.')).toBeVisible();
     await expect(plain.getByRole('radio', { name: /^Lower, from the end/ })).toBeChecked();
+    await field(plain, 'insideHeightMm').fill('80');
+    await field(plain, 'woven.left.water').fill('9');
+    await plain.getByRole('button', { name: /^Kitchen frame/ }).click();
+    await expect(field(plain, 'insideHeightMm')).toHaveValue('50');
+    await expect(field(plain, 'woven.left.water')).toHaveValue('9');
     await context.close();
   });
 });

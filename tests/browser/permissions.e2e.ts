@@ -37,6 +37,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/404': [{ at: '/404', answers: '404' }],
   '/500': [{ at: '/500', answers: '404' }],
   '/account': [{ at: '/account', answers: SIGNED_IN }],
+  '/account/looms': [{ at: '/account/looms', answers: SIGNED_IN }],
   '/api/openapi.json': [{ at: '/api/openapi.json', answers: EVERYBODY }],
   '/api/payments/events': [{ at: '/api/payments/events', post: true, answers: '400' }],
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],

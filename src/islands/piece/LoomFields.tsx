@@ -1,16 +1,17 @@
-import type { Dispatch } from 'react';
+import type { Dispatch, ReactNode } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARPING, WIDTH, type AskedLength } from '#core/craft/my-piece/asked-of-mine.ts';
 import { chosenLoom } from '#core/craft/my-piece/judge-mine.ts';
 import { LOOM_WORDS } from '#core/craft/looms/loom-words.ts';
 import { DEFAULT_KIND, loomKind } from '#core/craft/looms/looms.ts';
+import { LOOM_NAME, MOST_NAME } from '#core/craft/my-piece/own-loom.ts';
 import type { TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
 import { fieldUnit } from '#core/craft/piece-form/field-text.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import { Choose } from '#islands/ui/Choose.tsx';
-import { Select, UnitField } from '#islands/ui/Field.tsx';
+import { Field, Select, UnitField } from '#islands/ui/Field.tsx';
 import type { MineEvent } from './mine-after.ts';
 
 interface LoomFieldsProps {
@@ -20,12 +21,14 @@ interface LoomFieldsProps {
   /** With script, only what her loom asks is shown. */
   alive: boolean;
   change: Dispatch<MineEvent>;
+  /** Looms of hers to choose from. */
+  choice: ReactNode;
 }
 
 const UNITS = [{ value: 'cm', label: 'cm, g' }, { value: 'in', label: 'in, oz' }] as const;
 
 /** Loom, width and ends. What stays empty is as in the pattern, which stands in the hint. */
-export function LoomFields({ typed, pattern, faults, change, alive }: LoomFieldsProps) {
+export function LoomFields({ typed, pattern, faults, change, alive, choice: ownLooms }: LoomFieldsProps) {
   const { units } = typed;
   const { insideWidthMm, insideHeightMm, nailPitchMm } = pattern.loom;
   const ofPattern: Readonly<Record<string, number | undefined>> = { insideWidthMm, insideHeightMm, nailPitchMm, widthMm: pattern.size.widthMm };
@@ -57,6 +60,7 @@ export function LoomFields({ typed, pattern, faults, change, alive }: LoomFields
       <legend className="h3">Your loom</legend>
       <Choose name="units" legend="Units" value={units} options={UNITS} onChoose={(other) => change({ kind: 'units', units: other })} />
       <input type="hidden" name="shown" value={units} />
+      {ownLooms}
       <Select name={LOOM_KIND.key} label={LOOM_KIND.label} hint={LOOM_WORDS[name].dressing} value={textOf(typed.texts, LOOM_KIND.key)} options={choice(LOOM_KIND)} error={faults[LOOM_KIND.key]} onChange={(event) => change({ kind: 'type', key: LOOM_KIND.key, text: event.currentTarget.value })} />
       {(kind.rows === 2 || !alive) && chooser(NAIL_ROWS, choice(NAIL_ROWS), 'On a loom with two rows of nails.')}
       <div className="two folds">
@@ -67,6 +71,16 @@ export function LoomFields({ typed, pattern, faults, change, alive }: LoomFields
       </div>
       {chooser(ENDS, choice(ENDS), 'Doubled: two ends are worked as one, on a loom whose nails stand close.')}
       {(ways.length > 1 || !alive) && chooser(WARPING, alive ? ways : choice(WARPING))}
+      <Field
+        name={LOOM_NAME}
+        label="Keep this loom on your list as"
+        optional
+        hint="Then it can be chosen for every series. A name that is on the list already gets these measures."
+        value={textOf(typed.texts, LOOM_NAME)}
+        error={faults[LOOM_NAME]}
+        maxLength={MOST_NAME}
+        onChange={(event) => change({ kind: 'type', key: LOOM_NAME, text: event.currentTarget.value })}
+      />
     </fieldset>
   );
 }

@@ -2,7 +2,8 @@
 import { LEAVE_OUT, WARP_YARN, WAY_KEY } from '#core/craft/my-piece/asked-of-mine.ts';
 import type { WayId } from '#core/craft/fitting/ways-to-fit.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
-import { asPattern, inOtherUnits, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
+import type { OwnLoom } from '#core/craft/my-piece/own-loom.ts';
+import { asPattern, inOtherUnits, withLoom, yarnOf, type TypedMine } from '#core/craft/my-piece/typed-mine.ts';
 import type { Units } from '#core/units/units.ts';
 
 export type MineEvent =
@@ -10,6 +11,7 @@ export type MineEvent =
   | { readonly kind: 'leave-out'; readonly key: string; readonly isOut: boolean }
   /** `role` is null for the warp. */
   | { readonly kind: 'type-yarn'; readonly role: string | null; readonly key: string; readonly text: string }
+  | { readonly kind: 'loom'; readonly loom: OwnLoom }
   | { readonly kind: 'units'; readonly units: Units }
   | { readonly kind: 'as-pattern'; readonly pattern: FrameLoomPiece };
 
@@ -32,6 +34,8 @@ export function mineAfter(typed: TypedMine, event: MineEvent): TypedMine {
     case 'type-yarn':
       if (event.role === null) return { ...typed, warpYarn: { ...typed.warpYarn, [event.key]: event.text } };
       return { ...typed, yarns: { ...typed.yarns, [event.role]: { ...yarnOf(typed, event.role), [event.key]: event.text } } };
+    case 'loom':
+      return withLoom(typed, event.loom);
     case 'units':
       return inOtherUnits(typed, event.units);
     case 'as-pattern':

@@ -17,6 +17,7 @@ export { LetterChoice } from './letter-choice.ts';
 export { Mail } from './mail.ts';
 export { Media } from './media.ts';
 export { MyPieceRow } from './my-piece.ts';
+export { OwnLoomRow } from './own-loom.ts';
 export { NoticeReceipt } from './notice-receipt.ts';
 export { Notice } from './notice.ts';
 export { Order } from './order.ts';

@@ -63,6 +63,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/new-password/[token]': 'public',
   '/helping/[token]': 'public',
   '/account': 'signed-in',
+  '/account/looms': 'signed-in',
   '/prove': 'signed-in',
   '/office': 'steward',
   '/office/people': 'steward',

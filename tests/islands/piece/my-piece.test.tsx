@@ -12,7 +12,7 @@ const pattern = await lowTide();
 /** The whole text at once: each change draws the cloth anew. */
 const type = (name: RegExp | string, text: string): void => { fireEvent.change(screen.getByRole('textbox', { name }), { target: { value: text } }); };
 const describing = (field: HTMLElement): string => (field.getAttribute('aria-describedby') ?? '').split(' ').map((id) => document.getElementById(id)?.textContent ?? '').join(' ');
-const props: MyPieceProps = { slug: 'low-tide', name: 'Low Tide', teacher: 'Ilse', pattern, typed: typeMine({}, pattern, 'cm'), kept: { mine: {}, woven: { bandsDone: 0 } }, revision: 3, errors: {}, action: '?save' };
+const props: MyPieceProps = { slug: 'low-tide', name: 'Low Tide', teacher: 'Ilse', pattern, typed: typeMine({}, pattern, 'cm'), kept: { mine: {}, woven: { bandsDone: 0 } }, revision: 3, errors: {}, looms: [], action: '?save' };
 afterEach(cleanup);
 
 describe('my piece', () => {
@@ -60,6 +60,26 @@ describe('my piece', () => {
     expect(screen.getByRole('radio', { name: /^Lower, without bands you choose/ })).toHaveProperty('checked', true);
     expect(screen.getByRole('status').textContent).toBe('It fits your loom');
     expect(screen.getAllByText(/^Left out: dunes\./).length).toBeGreaterThan(0);
+  });
+
+  test('takes one of her looms in one press, and shows which one stands there', async () => {
+    const loom = { kind: 'nailed-frame', insideWidthMm: 360, insideHeightMm: 700, nailPitchMm: 8, warping: 'zigzag', endsTogether: 2 } as const;
+    render(<MyPiece {...props} looms={[{ publicId: 'a'.repeat(26), name: 'Kitchen frame', loom }]} />);
+    const kitchen = screen.getByRole('button', { name: /^Kitchen frame/ });
+    expect(kitchen.getAttribute('aria-pressed')).toBe('false');
+    await userEvent.click(kitchen);
+    expect(kitchen.getAttribute('aria-pressed')).toBe('true');
+    expect(screen.getByRole<HTMLInputElement>('textbox', { name: 'Inside width' }).value).toBe('36');
+    expect(screen.getByRole('radio', { name: 'Doubled' })).toHaveProperty('checked', true);
+  });
+
+  test('a warp yarn of her own takes the place of the pattern’s', () => {
+    const { container } = render(<MyPiece {...props} />);
+    const by = container.querySelector<HTMLSelectElement>('[name="warp.yarn.by"]');
+    if (by === null) throw new Error('no field for the warp');
+    fireEvent.change(by, { target: { value: 'tex' } });
+    fireEvent.change(container.querySelector('[name="warp.yarn.grist"]') ?? by, { target: { value: '200' } });
+    expect(screen.getByText('Your own yarn is the warp.')).toBeDefined();
   });
 
   test('without script the ways stand in the form, with what each comes to', () => {

@@ -1,21 +1,18 @@
 /** What a student's form comes to: her own piece with its plan, or a sentence at every field that stands in the way. */
-import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import type { FittedPiece, MyPiece } from '#core/craft/fit.ts';
 import { fitWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import { waysToFit, type WayToFit } from '#core/craft/fitting/ways-to-fit.ts';
 import { DEFAULT_KIND, LOOM_KIND_NAMES, loomKind, NAIL_ROW_NAMES } from '#core/craft/looms/looms.ts';
 import type { EndsTogether, LoomKindName, NailRows, FrameLoomPiece, Warping } from '#core/craft/piece.ts';
 import { WRAPS } from '#core/craft/piece-form/asked-of-yarn.ts';
-import { readText } from '#core/craft/piece-form/field-text.ts';
 import { readTyped } from '#core/craft/piece-form/read-typed.ts';
 import { textOf } from '#core/craft/piece-form/typed-piece.ts';
 import { present } from '#core/craft/reading/present.ts';
 import type { Outcome, Problem } from '#core/outcome.ts';
-import { amountText } from '#core/units/format-amount.ts';
-import type { Units } from '#core/units/units.ts';
 import { ENDS, INSIDE_HEIGHT, INSIDE_WIDTH, LOOM_KIND, NAIL_PITCH, NAIL_ROWS, WARP_YARN, WARPING, WAY_KEY, WIDTH, YARN_KEYS, type AskedLength } from './asked-of-mine.ts';
 import { isTold, judgeWoven, NOTHING_KEPT, wovenFieldOf, type Halfway, type KeptPiece } from './judge-woven.ts';
 import { isOwnYarn, leftOutBy, wayOf, yarnOf, type TypedMine } from './typed-mine.ts';
+import { readLength } from './read-length.ts';
 import { readTypedWoven } from './typed-woven.ts';
 
 export interface MineFound {
@@ -68,24 +65,6 @@ function isSaid(faults: ReadonlyMap<string, string>, field: string): boolean {
 function onePerField(found: readonly MineFound[]): MineFound[] {
   return [...new Map(found.toReversed().map((one) => [one.field, one])).values()].toReversed();
 }
-
-/** `3 mm` is a length, but no loom. */
-function readLength(typed: TypedMine, asked: AskedLength, faults: Map<string, string>): number | undefined {
-  const text = textOf(typed.texts, asked.key);
-  if (text.trim() === '') return undefined;
-  const read = readText(text, asked, typed.units);
-  if (!read.ok) {
-    faults.set(asked.key, read.says);
-    return undefined;
-  }
-  const { least, most, below, above } = asked.plausible;
-  const [leastMm, mostMm] = [least[typed.units], most[typed.units]];
-  if (read.value >= leastMm && read.value <= mostMm) return read.value;
-  faults.set(asked.key, `${read.value < leastMm ? below : above} Between ${limitText(leastMm, asked, typed.units)} and ${limitText(mostMm, asked, typed.units)} works.`);
-  return undefined;
-}
-
-const limitText = (mm: number, { kind }: AskedLength, units: Units): string => amountText(lengthOf(mm, kind === 'fine' ? 'fine' : 'size'), units);
 
 /** What differs from the pattern; a choice that is the pattern's own is none. */
 function readMine(typed: TypedMine, pattern: FrameLoomPiece, faults: Map<string, string>): MyPiece {

@@ -15,6 +15,7 @@ import { tryOnLoom } from '#core/trial/try-on-loom.ts';
 import type { TypedLoom } from '#core/trial/typed-loom.ts';
 import type { Units } from '#core/units/units.ts';
 import { AS_PATTERN, CHOICES, ENDS, LEAVE_OUT, LENGTHS, NAIL_PITCH, INSIDE_WIDTH, LOOM_KIND, NAIL_ROWS, WARP_YARN, WARPING, WAY_KEY, WIDTH, YARN_KEYS, YARN_TEXTS } from './asked-of-mine.ts';
+import { LOOM_NAME, loomTexts, type OwnLoom } from './own-loom.ts';
 import { typeWoven, wovenAsked, wovenTexts } from './typed-woven.ts';
 
 export interface TypedMine {
@@ -82,7 +83,7 @@ export function mineOfFields(ask: (name: string) => string | undefined, pattern:
   const yarn = (prefix: string): Texts => Object.fromEntries(YARN_KEYS.map((key) => [key, text(`${prefix}${key}`)]));
   const typed: TypedMine = {
     units: ask('shown') === 'in' ? 'in' : 'cm',
-    texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), WAY_KEY, ...leaveOutNames(pattern), ...wovenAsked(pattern).map(({ key }) => key)].map((key) => [key, text(key)])),
+    texts: Object.fromEntries([...[...LENGTHS, ...CHOICES].map(({ key }) => key), LOOM_NAME, WAY_KEY, ...leaveOutNames(pattern), ...wovenAsked(pattern).map(({ key }) => key)].map((key) => [key, text(key)])),
     warpYarn: yarn(WARP_YARN),
     yarns: Object.fromEntries(Object.keys(pattern.yarns).map((role) => [role, yarn(`yarns.${role}.`)])),
   };
@@ -100,6 +101,11 @@ export function inOtherUnits(typed: TypedMine, units: Units): TypedMine {
     return [asked.key, read.ok ? fieldText(read.value, asked, units) : text];
   }));
   return { ...typed, units, texts: { ...typed.texts, ...texts } };
+}
+
+/** With a loom of her list in its fields. */
+export function withLoom(typed: TypedMine, loom: OwnLoom): TypedMine {
+  return { ...typed, texts: { ...typed.texts, ...loomTexts(loom, typed.units) } };
 }
 
 /** With the loom she tried the pattern on before she had a seat. */

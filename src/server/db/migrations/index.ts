@@ -20,6 +20,7 @@ import { createQuestions } from './0018-create-questions.ts';
 import { createHelperInvitations } from './0019-create-helper-invitations.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 import { createLessonReads } from './0021-create-lesson-reads.ts';
+import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
 
 export const migrations: readonly Migration[] = [
@@ -44,4 +45,5 @@ export const migrations: readonly Migration[] = [
   createKeptThings,
   createLessonReads,
   createRowTallies,
+  createOwnLooms,
 ];

@@ -2,6 +2,8 @@ import type { MyPieceInput } from '#contracts/my-piece.ts';
 import type { Piece } from '#core/craft/crafts.ts';
 import { cordsOfFields, judgeCords, typeCords } from '#core/craft/macrame/my-piece.ts';
 import { judgeMine, type MineFound } from '#core/craft/my-piece/judge-mine.ts';
+import { INSIDE_WIDTH } from '#core/craft/my-piece/asked-of-mine.ts';
+import { LOOM_NAME, loomOfMine, MISSING_WIDTH, readLoomName, type OwnLoom } from '#core/craft/my-piece/own-loom.ts';
 import { asPattern, mineOfFields } from '#core/craft/my-piece/typed-mine.ts';
 import type { MyPiece } from '#core/craft/fit.ts';
 import { isBegun, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
@@ -12,12 +14,13 @@ import { AppError, authorize, found } from '#server/errors.ts';
 import { Enrolment, MyPieceRow, User } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
+import { writeLoom } from '#server/use-cases/looms/_write-loom.ts';
 
 const CHANGED = { says: 'Your piece was changed in another window or on another device meanwhile. What you typed still stands here. Keep it once more to have it so, or load the page again to see the other.' };
 
 /**
  * Keeps a student's own loom, width and yarns, or cord and rod, if the piece can be made so, with what is woven of it; and the units she
- * chose, with her account. What is woven already can no longer change. `isBegun` says whether some of it is.
+ * chose, with her account, and her loom on her list where she named it. What is woven already can no longer change. `isBegun` says whether some of it is.
  * @throws VALIDATION with a sentence for each field; CONFLICT when another window or device changed it meanwhile.
  */
 export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ revision: number; isBegun: boolean }> {
@@ -31,6 +34,7 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
   if (before.revision !== input.revision) throw new AppError('CONFLICT', CHANGED);
   const { units, judged } = judge(input, pattern, before);
   if (!judged.ok) throw new AppError('VALIDATION', { fields: Object.fromEntries(judged.problems.map(({ field, says }) => [field, says])) });
+  const named = loomToKeep(input, pattern, judged.mine);
   const woven = judged.halfway?.woven ?? null;
   return withTransaction(async () => {
     found(await Enrolment.findByPk(seat.enrolmentId, { lock: true }));
@@ -39,9 +43,21 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
     const revision = input.revision + 1;
     if (kept === null) await MyPieceRow.create({ enrolmentId: seat.enrolmentId, data: judged.mine, woven, revision });
     else await kept.update({ data: judged.mine, woven, revision });
+    if (named !== null) await writeLoom(userId, named);
     await User.update({ units }, { where: { id: userId } });
     return { revision, isBegun: woven !== null && isBegun(woven) };
   });
+}
+
+/** The loom she gave a name to; null for none. @throws VALIDATION at the name or at the width nobody told. */
+function loomToKeep(input: MyPieceInput, pattern: Piece, mine: MyPiece): { readonly name: string; readonly loom: OwnLoom } | null {
+  const typed = textOf(input, LOOM_NAME) ?? '';
+  if (pattern.craft !== 'frame-loom' || typed.trim() === '' || input.asPattern !== undefined) return null;
+  const faults = new Map<string, string>();
+  const [name, loom] = [readLoomName(typed, faults), loomOfMine(pattern, mine)];
+  if (loom === undefined) faults.set(INSIDE_WIDTH.key, MISSING_WIDTH);
+  if (name === undefined || loom === undefined) throw new AppError('VALIDATION', { fields: Object.fromEntries(faults) });
+  return { name, loom };
 }
 
 interface Judged {
