@@ -43,6 +43,8 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/kept-pages': [{ at: '/api/kept-pages', answers: EVERYBODY }],
   '/offline': [{ at: '/offline', answers: EVERYBODY }],
+  '/api/photos/pieces/[...upload]': [{ at: '/api/photos/pieces', post: true, answers: '401 412 412 412 412 412 412' }],
+  '/api/photos/show': [{ at: '/api/photos/show', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/reckon': [{ at: '/api/reckon', post: true, answers: '422' }],
   '/api/seats/[slug]': [{ at: '/api/seats/low-tide', answers: SIGNED_IN.replace('303', '401') }],
   '/api/rows': [{ at: '/api/rows', post: true, answers: '401 422 422 422 422 422 422' }],

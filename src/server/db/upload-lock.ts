@@ -26,19 +26,24 @@ class UploadHeld extends Error {
   readonly body = 'Another request is writing to this upload\n';
 }
 
+/** Rows that say who holds what: one table for each kind of upload, all made alike. */
+export type UploadTable = 'video_uploads' | 'photo_uploads';
+
 const BY_UPLOAD = 'media_id = (SELECT id FROM media WHERE public_id = ?)';
 
-export function uploadLocker(times: UploadLockTimes = TIMES): Locker {
-  return { newLock: (publicId) => new UploadLock(publicId, times) };
+export function uploadLocker(table: UploadTable, times: UploadLockTimes = TIMES): Locker {
+  return { newLock: (publicId) => new UploadLock(table, publicId, times) };
 }
 
 class UploadLock implements Lock {
+  readonly #table: UploadTable;
   readonly #publicId: string;
   readonly #times: UploadLockTimes;
   readonly #holder = randomUUID();
   #renewing: NodeJS.Timeout | undefined;
 
-  constructor(publicId: string, times: UploadLockTimes) {
+  constructor(table: UploadTable, publicId: string, times: UploadLockTimes) {
+    this.#table = table;
     this.#publicId = publicId;
     this.#times = times;
   }
@@ -54,27 +59,27 @@ class UploadLock implements Lock {
 
   async unlock(): Promise<void> {
     clearInterval(this.#renewing);
-    await change(`UPDATE video_uploads SET held_by = NULL, held_until = NULL, is_wanted = 0 WHERE ${BY_UPLOAD} AND held_by = ?`, [this.#publicId, this.#holder]);
+    await change(`UPDATE ${this.#table} SET held_by = NULL, held_until = NULL, is_wanted = 0 WHERE ${BY_UPLOAD} AND held_by = ?`, [this.#publicId, this.#holder]);
   }
 
   /** True when it is ours now, or when there is nothing left to hold. */
   async #take(): Promise<boolean> {
     const until = this.#times.holdMs * 1_000;
     const taken = await change(
-      `UPDATE video_uploads SET held_by = ?, held_until = UTC_TIMESTAMP(3) + INTERVAL ? MICROSECOND, is_wanted = 0
+      `UPDATE ${this.#table} SET held_by = ?, held_until = UTC_TIMESTAMP(3) + INTERVAL ? MICROSECOND, is_wanted = 0
         WHERE ${BY_UPLOAD} AND (held_until IS NULL OR held_until < UTC_TIMESTAMP(3))`,
       [this.#holder, until, this.#publicId],
     );
     if (taken === 1) return true;
-    const marked = await sequelize.query<{ n: number }>(`SELECT COUNT(*) AS n FROM video_uploads WHERE ${BY_UPLOAD}`, { replacements: [this.#publicId], type: QueryTypes.SELECT });
+    const marked = await sequelize.query<{ n: number }>(`SELECT COUNT(*) AS n FROM ${this.#table} WHERE ${BY_UPLOAD}`, { replacements: [this.#publicId], type: QueryTypes.SELECT });
     if (marked[0]?.n === 0) return true;
-    await change(`UPDATE video_uploads SET is_wanted = 1 WHERE ${BY_UPLOAD}`, [this.#publicId]);
+    await change(`UPDATE ${this.#table} SET is_wanted = 1 WHERE ${BY_UPLOAD}`, [this.#publicId]);
     return false;
   }
 
   async #renew(letGo: RequestRelease): Promise<void> {
-    await change(`UPDATE video_uploads SET held_until = UTC_TIMESTAMP(3) + INTERVAL ? MICROSECOND WHERE ${BY_UPLOAD} AND held_by = ?`, [this.#times.holdMs * 1_000, this.#publicId, this.#holder]);
-    const [row] = await sequelize.query<{ isWanted: number }>(`SELECT is_wanted AS isWanted FROM video_uploads WHERE ${BY_UPLOAD} AND held_by = ?`, { replacements: [this.#publicId, this.#holder], type: QueryTypes.SELECT });
+    await change(`UPDATE ${this.#table} SET held_until = UTC_TIMESTAMP(3) + INTERVAL ? MICROSECOND WHERE ${BY_UPLOAD} AND held_by = ?`, [this.#times.holdMs * 1_000, this.#publicId, this.#holder]);
+    const [row] = await sequelize.query<{ isWanted: number }>(`SELECT is_wanted AS isWanted FROM ${this.#table} WHERE ${BY_UPLOAD} AND held_by = ?`, { replacements: [this.#publicId, this.#holder], type: QueryTypes.SELECT });
     if (row?.isWanted === 1) await letGo();
   }
 }

@@ -44,7 +44,7 @@ export async function bringMaudToPartTwo(maud: User, series: Series, seat: Enrol
   await LessonVisit.upsert({ enrolmentId: seat.id, lessonId: second.id });
   const path = await drawnPhoto(series, seat);
   try {
-    await postPhoto(ctx, { series: series.slug, lesson: second.publicId, words: 'The two ends at the left look slacker than the rest. Is that enough to wind it again?', path, originalName: 'warped-loom.jpg' });
+    await postPhoto(ctx, { series: series.slug, lesson: second.publicId, words: 'The two ends at the left look slacker than the rest. Is that enough to wind it again?', files: [{ path, originalName: 'warped-loom.jpg' }] });
   } finally {
     await rm(path, { force: true });
   }

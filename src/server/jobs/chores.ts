@@ -4,6 +4,7 @@ import type { WorkerOptions } from '#server/jobs/worker.ts';
 import { lookAtOldOrders } from '#server/use-cases/checkout/look-at-old-orders.ts';
 import { tellOpenings } from '#server/use-cases/openings/tell-openings.ts';
 import { forgetOldLinks } from '#server/use-cases/people/forget-old-links.ts';
+import { lookAfterPhotoUploads } from '#server/use-cases/photos/look-after-photo-uploads.ts';
 import { forgetTakenOutWords } from '#server/use-cases/questions/forget-taken-out-words.ts';
 import { lookAfterUploads } from '#server/use-cases/videos/look-after-uploads.ts';
 import { forgetOldCounters } from '#server/web/rate-limit.ts';
@@ -16,6 +17,7 @@ export const CHORES: WorkerOptions['chores'] = [
   { everySeconds: MINUTE, run: tellOpenings },
   { everySeconds: FIVE_MINUTES, run: lookAtOldOrders },
   { everySeconds: FIVE_MINUTES, run: lookAfterUploads },
+  { everySeconds: FIVE_MINUTES, run: lookAfterPhotoUploads },
   { everySeconds: HOUR, run: () => sessionAdapter.deleteExpiredSessions() },
   { everySeconds: HOUR, run: forgetOldLinks },
   { everySeconds: HOUR, run: forgetTakenOutWords },

@@ -2,9 +2,13 @@
  * Photos of people: decoded, turned upright, stripped of everything but the picture, and written anew, before anybody
  * else sees them. The original is not kept: it may carry a place, a name, or something that is no picture.
  */
-import { open, rm } from 'node:fs/promises';
+import { createHash } from 'node:crypto';
+import { createReadStream } from 'node:fs';
+import { open, rm, stat } from 'node:fs/promises';
+import { pipeline } from 'node:stream/promises';
 import sharp from 'sharp';
 import type { MediaFile, MediaFiles } from '#contracts/media.ts';
+import { PHOTO_EMPTY, PHOTO_KINDS_WORDS, PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { AppError } from '#server/errors.ts';
 import { readOnlyPhotos } from '#server/media/decoders.ts';
 import type { MediaStore } from '#server/media/store.ts';
@@ -13,12 +17,11 @@ readOnlyPhotos();
 sharp.cache(false);
 sharp.concurrency(1);
 
-/** What is taken, shown to people in these words. */
-export const PHOTO_LIMITS = { maxBytes: 25_000_000, maxPixels: 50_000_000, maxSide: 12_000 } as const;
-export const PHOTO_KINDS_WORDS = 'JPEG, PNG or WebP, up to 25 MB';
-
 const RENDITIONS = { large: { side: 2_048, quality: 82 }, thumb: { side: 320, quality: 76 } } as const;
 const NOT_A_PHOTO = `This file is not a photo we can read. Use ${PHOTO_KINDS_WORDS}.`;
+
+/** Where photos lie whose bytes are still arriving. */
+export const PHOTO_UPLOADS_FOLDER = 'photos';
 
 export interface ReadPhoto {
   readonly width: number;
@@ -48,6 +51,7 @@ async function kindOf(path: string): Promise<'jpeg' | 'png' | 'webp' | 'avif' | 
  * @throws UNSUPPORTED when it is no photo; TOO_LARGE by pixels or sides. The sentence says what works.
  */
 export async function takePhoto(store: MediaStore, path: string, folder: string): Promise<ReadPhoto> {
+  if ((await stat(path)).size === 0) throw new AppError('UNSUPPORTED', { says: PHOTO_EMPTY });
   const kind = await kindOf(path);
   if (kind === 'heic') throw new AppError('UNSUPPORTED', { says: 'This photo is in a form only some phones read. Send it as JPEG: in the camera settings choose the most compatible form, or take a picture of the picture.' });
   if (kind === null) throw new AppError('UNSUPPORTED', { says: NOT_A_PHOTO });
@@ -88,4 +92,11 @@ async function measure(path: string): Promise<{ width: number; height: number }>
   }
   if (width < 16 || height < 16) throw new AppError('UNSUPPORTED', { says: 'This picture is too small to see anything in it.' });
   return { width, height };
+}
+
+/** SHA-256 of the file at `path`, in hex. */
+export async function digestOf(path: string): Promise<string> {
+  const hash = createHash('sha256');
+  await pipeline(createReadStream(path), hash);
+  return hash.digest('hex');
 }

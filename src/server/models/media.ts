@@ -12,6 +12,8 @@ export class Media extends Model<InferAttributes<Media>, InferCreationAttributes
   declare state: CreationOptional<MediaState>;
   declare originalName: string;
   declare byteCount: CreationOptional<number>;
+  /** SHA-256 of a photo's file as it was sent, in hex: the same file sent twice is known by it. */
+  declare digest: CreationOptional<string | null>;
   declare width: CreationOptional<number | null>;
   declare height: CreationOptional<number | null>;
   declare durationMs: CreationOptional<number | null>;
@@ -36,6 +38,7 @@ Media.init({
   state: oneOf(MEDIA_STATES, 'created'),
   originalName: text(120),
   byteCount: { type: DataTypes.BIGINT, allowNull: false, defaultValue: 0 },
+  digest: maybeText(64),
   width: maybeRef(),
   height: maybeRef(),
   durationMs: maybeRef(),

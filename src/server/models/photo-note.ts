@@ -7,6 +7,8 @@ export class PhotoNote extends Model<InferAttributes<PhotoNote>, InferCreationAt
   declare id: CreationOptional<number>;
   declare photoId: number;
   declare position: number;
+  /** Which photo of the showing it is about; 1 for the first. */
+  declare shot: CreationOptional<number>;
   declare words: string;
   declare xPermille: CreationOptional<number | null>;
   declare yPermille: CreationOptional<number | null>;
@@ -19,6 +21,7 @@ PhotoNote.init({
   id: id(),
   photoId: ref(),
   position: count(),
+  shot: count(1),
   words: text(600),
   xPermille: maybeRef(),
   yPermille: maybeRef(),

@@ -2,7 +2,10 @@ import { Model, type CreationOptional, type InferAttributes, type InferCreationA
 import { id, maybeMoment, maybeRef, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
-/** A photo posted at a checkpoint, and what was said of it. The thread of a checkpoint is its photos in order. */
+/**
+ * A photo posted at a checkpoint, and what was said of it. The thread of a checkpoint is its photos in order. Further
+ * shots that were shown with it are `FurtherShot`s; words, verdict and notes are of all together.
+ */
 export class ProgressPhoto extends Model<InferAttributes<ProgressPhoto>, InferCreationAttributes<ProgressPhoto>> {
   declare id: CreationOptional<number>;
   declare publicId: CreationOptional<string>;

@@ -31,6 +31,8 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/api/kept-pages': 'public',
   '/offline': 'public',
   '/api/photos': 'signed-in',
+  '/api/photos/pieces/[...upload]': 'signed-in',
+  '/api/photos/show': 'signed-in',
   '/api/openapi.json': 'machine',
   '/api/reckon': 'machine',
   '/api/rows': 'signed-in',

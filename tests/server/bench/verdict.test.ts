@@ -58,7 +58,7 @@ describe('a verdict', () => {
     await photoOf(all, new Date('2026-12-01T08:00:00Z'));
     const thread = await photoThread(all.seat.id, all.checkpoint.id);
     expect(thread.map(({ verdict, verdictBy, notes }) => [verdict, verdictBy, notes.length])).toEqual([['mend-first', 'Ilse Marrow', 1], ['waits', null, 0]]);
-    expect(thread[0]?.notes[0]).toEqual({ words: 'Ends 14 and 15 change places here.', xPermille: 460, yPermille: 520 });
+    expect(thread[0]?.notes[0]).toEqual({ words: 'Ends 14 and 15 change places here.', shot: 1, xPermille: 460, yPermille: 520 });
     expect((await seriesFor(await actorOf(all.student), all.series.slug, new Date()))?.parts[1]?.access.may).toBe('wait');
   });
 

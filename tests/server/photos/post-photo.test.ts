@@ -17,10 +17,15 @@ beforeEach(async () => { folder = await mkdtemp(join(tmpdir(), 'fellmark-post-')
 afterEach(() => rm(folder, { recursive: true }));
 
 const contextWithStore = (user: User): Promise<TestContext> => contextFor(user, { media: new DiskMediaStore(join(folder, 'uploads')) });
-async function upload(bytes?: Buffer): Promise<{ path: string; originalName: string; words: string }> {
-  const path = join(folder, 'upload');
-  await writeFile(path, bytes ?? (await sharp({ create: { width: 640, height: 480, channels: 3, background: '#7a8f99' } }).jpeg().toBuffer()));
-  return { path, originalName: 'warped-loom.jpg', words: 'Is the left edge slack?' };
+const picture = (red = 120) => sharp({ create: { width: 640, height: 480, channels: 3, background: { r: red, g: 143, b: 153 } } }).jpeg().toBuffer();
+async function upload(...bytes: readonly Buffer[]) {
+  const given = bytes.length === 0 ? [await picture()] : bytes;
+  const files = await Promise.all(given.map(async (one, index) => {
+    const path = join(folder, `upload-${index}`);
+    await writeFile(path, one);
+    return { path, originalName: 'warped-loom.jpg' };
+  }));
+  return { files, words: 'Is the left edge slack?' };
 }
 const files = async (): Promise<string[]> => (await readdir(join(folder, 'uploads', 'photos'), { recursive: true }).catch(() => [])).filter((name) => name.endsWith('.webp'));
 
@@ -28,8 +33,39 @@ describe('a progress photo', () => {
   test('joins the thread and waits', async () => {
     const { series, parts: [, second], student, seat } = await buildFollowed();
     await postPhoto(await contextWithStore(student), { series: series.slug, lesson: second.publicId, ...(await upload()) });
-    expect(await photoThread(seat.id, second.id)).toMatchObject([{ words: 'Is the left edge slack?', verdict: 'waits', width: 640, height: 480 }]);
+    expect(await photoThread(seat.id, second.id)).toMatchObject([{ words: 'Is the left edge slack?', verdict: 'waits', shots: [{ width: 640, height: 480 }] }]);
     expect(await files()).toHaveLength(2);
+  });
+
+  test('may be several, shown together: one entry of the thread with its shots in order', async () => {
+    const { series, parts: [, second], student, seat } = await buildFollowed();
+    await postPhoto(await contextWithStore(student), { series: series.slug, lesson: second.publicId, ...(await upload(await picture(1), await sharp(await picture(99)).resize(300, 400).jpeg().toBuffer())) });
+    expect(await photoThread(seat.id, second.id)).toMatchObject([{ shots: [{ width: 640, height: 480 }, { width: 300, height: 400 }] }]);
+    expect(await files()).toHaveLength(4);
+  });
+
+  test('sent twice, even at the same moment, is one', async () => {
+    const { series, parts: [, second], student } = await buildFollowed();
+    const ctx = await contextWithStore(student);
+    const input = { series: series.slug, lesson: second.publicId, ...(await upload()) };
+    const [one, two] = await Promise.all([postPhoto(ctx, input), postPhoto(ctx, input)]);
+    expect(one.id).toBe(two.id);
+    expect((await postPhoto(ctx, input)).id).toBe(one.id);
+    expect([await ProgressPhoto.count(), await Media.count(), (await files()).length]).toEqual([1, 1, 2]);
+  });
+
+  test('that was answered already is told so, not asked about again', async () => {
+    const { series, parts: [, second], student } = await buildFollowed();
+    const ctx = await contextWithStore(student);
+    const input = { series: series.slug, lesson: second.publicId, ...(await upload()) };
+    await (await postPhoto(ctx, input)).update({ verdict: 'mend-first' });
+    await expect(postPhoto(ctx, input)).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('shown this photo already') });
+  });
+
+  test('of a seat that ended while she read the page is refused in clear words', async () => {
+    const { series, parts: [, second], student, seat } = await buildFollowed();
+    await seat.update({ state: 'closed' });
+    await expect(postPhoto(await contextWithStore(student), { series: series.slug, lesson: second.publicId, ...(await upload()) })).rejects.toMatchObject({ code: 'GONE', says: expect.stringContaining('Your seat in this series has ended') });
   });
 
   test('is refused to a visitor, without a seat, and in a part that is not open', async () => {
@@ -56,9 +92,9 @@ describe('a progress photo', () => {
   test('the seventh that would wait is told to wait its turn, and leaves nothing behind', async () => {
     const { series, parts: [, second], student } = await buildFollowed();
     const ctx = await contextWithStore(student);
-    const post = async () => postPhoto(ctx, { series: series.slug, lesson: second.publicId, ...(await upload()) });
-    for (let number = 1; number <= 6; number += 1) await post();
-    await expect(post()).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('6 photos of yours wait already') });
+    const post = async (number: number) => postPhoto(ctx, { series: series.slug, lesson: second.publicId, ...(await upload(await picture(number * 30))) });
+    for (let number = 1; number <= 6; number += 1) await post(number);
+    await expect(post(7)).rejects.toMatchObject({ code: 'CONFLICT', says: expect.stringContaining('6 photos of yours wait already') });
     expect(await ProgressPhoto.count()).toBe(6);
     expect(await files()).toHaveLength(12);
   });

@@ -28,7 +28,7 @@ const COLUMNS = [
   {
     model: Media,
     taken: ['kind', 'files', 'detail', 'draftDetail', 'durationMs'],
-    left: { id: OF_THE_HOUSE, publicId: OF_THE_HOUSE, ownerId: OF_THE_HOUSE, state: MADE, originalName: 'the name in the zip takes its place', byteCount: MADE, width: MADE, height: MADE, revision: COUNTED, progressPermille: MADE, failure: MADE },
+    left: { id: OF_THE_HOUSE, publicId: OF_THE_HOUSE, ownerId: OF_THE_HOUSE, state: MADE, originalName: 'the name in the zip takes its place', byteCount: MADE, digest: 'of photos of people only', width: MADE, height: MADE, revision: COUNTED, progressPermille: MADE, failure: MADE },
   },
 ];
 

@@ -13,7 +13,7 @@ import { makeVideoReady } from '#server/use-cases/videos/make-video-ready.ts';
 import { makeClip } from '../../support/clips.ts';
 import { contextFor } from '../../support/context.ts';
 import { buildLesson, buildSeries, buildWorkroom } from '../../support/factories.ts';
-import { beginning, openVideoDoor, type VideoDoor } from '../../support/video-door.ts';
+import { beginning, openVideoDoor, type UploadDoor } from '../../support/upload-door.ts';
 
 const GIGABYTE = 1_000_000_000;
 const PIECE = 8 * 1_048_576;
@@ -42,7 +42,7 @@ describe('a film of a gigabyte', () => {
     const workroom = await buildWorkroom();
     const ctx = await contextFor(await User.findByPk(workroom.ownerId, { rejectOnEmpty: true }));
     const lesson = await buildLesson({ seriesId: (await buildSeries({ workroomId: workroom.id })).id });
-    let door: VideoDoor = await openVideoDoor(ctx);
+    let door: UploadDoor = await openVideoDoor(ctx);
     const at = (await door.send(beginning(lesson.publicId, GIGABYTE)))?.headers.location ?? '';
     const upload = join(await services().media.temporaryFolder('videos'), at.split('/').at(-1) ?? '');
     const offsetOf = async (): Promise<number> => Number((await door.send({ method: 'HEAD', path: at }))?.headers['upload-offset']);

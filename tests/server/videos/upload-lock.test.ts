@@ -15,7 +15,7 @@ beforeEach(async () => {
 
 describe('who writes to an upload', () => {
   test('is one at a time, among any number of processes: who comes next asks the holder to let go', async () => {
-    const [first, second] = [uploadLocker(TIMES).newLock(id), uploadLocker(TIMES).newLock(id)];
+    const [first, second] = [uploadLocker('video_uploads', TIMES).newLock(id), uploadLocker('video_uploads', TIMES).newLock(id)];
     const letGo = vi.fn(() => first.unlock());
     await first.lock(never, letGo);
     await second.lock(never, vi.fn());
@@ -25,18 +25,18 @@ describe('who writes to an upload', () => {
   });
 
   test('lets go when its process died: nobody renews the hold', async () => {
-    const dead = uploadLocker({ ...TIMES, renewMs: 1_000_000 }).newLock(id);
+    const dead = uploadLocker('video_uploads', { ...TIMES, renewMs: 1_000_000 }).newLock(id);
     await dead.lock(never, vi.fn());
-    const next = uploadLocker(TIMES).newLock(id);
+    const next = uploadLocker('video_uploads', TIMES).newLock(id);
     await next.lock(never, vi.fn());
     await next.unlock();
     await dead.unlock();
   });
 
   test('holds on as long as it writes, and who waited too long is told to come again', async () => {
-    const first = uploadLocker(TIMES).newLock(id);
+    const first = uploadLocker('video_uploads', TIMES).newLock(id);
     await first.lock(never, vi.fn());
-    await expect(uploadLocker({ ...TIMES, waitMs: 1_500 }).newLock(id).lock(never, vi.fn())).rejects.toMatchObject({ status_code: 423 });
+    await expect(uploadLocker('video_uploads', { ...TIMES, waitMs: 1_500 }).newLock(id).lock(never, vi.fn())).rejects.toMatchObject({ status_code: 423 });
     await first.unlock();
   });
 });

@@ -9,10 +9,10 @@ import { User } from '#server/models/index.ts';
 import { services } from '#server/services.ts';
 import { contextFor, contextOf } from '../../support/context.ts';
 import { buildLesson, buildSeries, buildUser, buildWorkroom } from '../../support/factories.ts';
-import { beginning, going, openVideoDoor, type VideoDoor } from '../../support/video-door.ts';
+import { beginning, going, openVideoDoor, type UploadDoor } from '../../support/upload-door.ts';
 
 const MIB = 1_048_576;
-let door: VideoDoor;
+let door: UploadDoor;
 let teacher: User;
 let series: Series;
 let lesson: Lesson;

@@ -1,17 +1,16 @@
 import type { APIContext, APIRoute } from 'astro';
+import { PHOTO_LIMITS, PHOTO_TOO_LARGE, TOO_MANY_SHOTS } from '#core/photo/limits.ts';
 import { AppError } from '#server/errors.ts';
-import { PHOTO_LIMITS } from '#server/media/photo.ts';
 import { postPhoto } from '#server/use-cases/photos/post-photo.ts';
 import { withMultipart, type ReceivedForm } from '#server/web/multipart.ts';
 import { photoFaultCookie, writePhotoFault } from '#server/web/photo-fault.ts';
 import { answering, json, knownError, wantsPage } from '#server/web/respond.ts';
 
-const TOO_LARGE = 'This photo is larger than 25 MB. Send it smaller: most phones ask for a size when they share a picture.';
-const LIMITS = { field: 'photo', maxBytes: PHOTO_LIMITS.maxBytes, tooLargeSays: TOO_LARGE };
+const LIMITS = { field: 'photo', maxBytes: PHOTO_LIMITS.maxBytes, tooLargeSays: PHOTO_TOO_LARGE, most: { files: PHOTO_LIMITS.maxShots, says: TOO_MANY_SHOTS } };
 
 /**
- * Takes a progress photo. An island gets JSON. A browser without JavaScript names the part in `back` and is sent back
- * there, with the sentence and its words when the photo was not taken.
+ * Takes progress photos that come whole with a form, shown together. A program gets JSON. A browser without JavaScript
+ * names the part in `back` and is sent back there, with the sentence and its words when they were not taken.
  */
 export const POST: APIRoute = (context) => {
   const { request, locals: { ctx } } = context;
@@ -19,13 +18,13 @@ export const POST: APIRoute = (context) => {
   return wantsPage(request) ? work() : answering(ctx.requestId, work);
 };
 
-async function takeFrom({ fields, file, fault }: ReceivedForm, context: APIContext): Promise<Response> {
+async function takeFrom({ fields, files, fault }: ReceivedForm, context: APIContext): Promise<Response> {
   const { series = '', lesson = '', words = '', back = '' } = fields;
   const toPart = /^[1-9][0-9]?$/.test(back) && /^[a-z0-9-]{1,64}$/.test(series) ? `/series/${series}/${back}#checkpoint` : null;
   try {
     if (fault !== null) throw fault;
-    if (file === null) throw new AppError('VALIDATION', { says: 'No photo came with this form. Choose one and send it again.' });
-    const photo = await postPhoto(context.locals.ctx, { series, lesson, words, path: file.path, originalName: file.originalName });
+    if (files.length === 0) throw new AppError('VALIDATION', { says: 'No photo came with this form. Choose one and send it again.' });
+    const photo = await postPhoto(context.locals.ctx, { series, lesson, words, files });
     return toPart === null ? json({ photo: photo.publicId }, 201) : context.redirect(toPart, 303);
   } catch (error) {
     const known = knownError(error);

@@ -1,7 +1,7 @@
 import type { APIRoute } from 'astro';
 import type { PicturePutIn } from '#contracts/media.ts';
 import { AppError } from '#server/errors.ts';
-import { PHOTO_LIMITS } from '#server/media/photo.ts';
+import { PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { putInPicture } from '#server/use-cases/pictures/put-in-picture.ts';
 import { withMultipart } from '#server/web/multipart.ts';
 import { answering, json } from '#server/web/respond.ts';

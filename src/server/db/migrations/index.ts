@@ -22,6 +22,7 @@ import { createKeptThings } from './0020-create-kept-things.ts';
 import { createLessonReads } from './0021-create-lesson-reads.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
+import { createPhotoUploads } from './0028-create-photo-uploads.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -46,4 +47,5 @@ export const migrations: readonly Migration[] = [
   createLessonReads,
   createRowTallies,
   createOwnLooms,
+  createPhotoUploads,
 ];

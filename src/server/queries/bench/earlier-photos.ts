@@ -1,4 +1,4 @@
-/** What a student has shown before in one series, at whatever checkpoint: to lay beside the photo in hand. */
+/** What a student has shown before in one series, at whatever checkpoint, shot by shot: to lay beside the photo in hand. */
 import { QueryTypes } from 'sequelize';
 import { sequelize } from '#server/db/sequelize.ts';
 import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
@@ -20,10 +20,10 @@ export function earlierPhotos(enrolmentId: number, publicId: string, limit = 8):
             ${PART_NUMBER} AS partNumber
        FROM progress_photos p
        JOIN progress_photos shown ON shown.public_id = :publicId
-       JOIN media m ON m.id = p.media_id
+       JOIN media m ON m.id = p.media_id OR m.id IN (SELECT f.media_id FROM further_shots f WHERE f.photo_id = p.id)
        JOIN lessons l ON l.id = p.lesson_id
       WHERE p.enrolment_id = :enrolmentId AND (p.created_at, p.id) < (shown.created_at, shown.id)
-      ORDER BY p.created_at DESC, p.id DESC LIMIT :limit`,
+      ORDER BY p.created_at DESC, p.id DESC, m.id = p.media_id DESC, m.id LIMIT :limit`,
     { replacements: { enrolmentId, publicId, limit }, type: QueryTypes.SELECT },
   );
 }

@@ -24,8 +24,8 @@ async function photoUses(mediaId: number): Promise<MediaUse[]> {
   const rows = await sequelize.query<{ studentId: number; workroomId: number }>(
     `SELECT e.user_id AS studentId, s.workroom_id AS workroomId
        FROM progress_photos p JOIN enrolments e ON e.id = p.enrolment_id JOIN series s ON s.id = e.series_id
-      WHERE p.media_id = ?`,
-    { replacements: [mediaId], type: QueryTypes.SELECT },
+      WHERE p.media_id = :mediaId OR p.id IN (SELECT f.photo_id FROM further_shots f WHERE f.media_id = :mediaId)`,
+    { replacements: { mediaId }, type: QueryTypes.SELECT },
   );
   return rows.map((row) => ({ kind: 'progress-photo', ...row }));
 }

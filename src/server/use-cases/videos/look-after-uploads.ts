@@ -5,14 +5,13 @@ import { VIDEO_LIMITS } from '#core/video/limits.ts';
 import type { Context } from '#server/context.ts';
 import { VIDEO_UPLOADS_FOLDER, VIDEO_WORK_FOLDER } from '#server/media/video/folders.ts';
 import type { MediaStore } from '#server/media/store.ts';
+import { sweep } from '#server/media/sweep.ts';
 import { SERIES_FOLDERS } from '#server/series-folder/folders.ts';
 import { Media, SeriesMedia, VideoUpload } from '#server/models/index.ts';
 import { forgetUpload } from './_forget-upload.ts';
 import { sendToWorker } from './_send-to-worker.ts';
 
 const HOUR_MS = 3_600_000;
-/** Bytes without a row, and rows without bytes, are left alone this long: one may be on the way to the other. */
-const ORPHAN_MS = 48 * HOUR_MS;
 /** A film that nothing shows any more can be brought back this long. */
 const UNUSED_MS = 30 * 24 * HOUR_MS;
 
@@ -40,14 +39,6 @@ export async function lookAfterUploads({ clock, services }: Context): Promise<vo
   await sweep(await services.media.temporaryFolder(VIDEO_WORK_FOLDER), new Set(), now);
   await sweep(await services.media.temporaryFolder(SERIES_FOLDERS), new Set(), now);
   await removeUnused(services.media, new Date(now - UNUSED_MS));
-}
-
-async function sweep(folder: string, wanted: ReadonlySet<string>, now: number): Promise<void> {
-  for (const name of (await readdir(folder)).filter((one) => !wanted.has(one))) {
-    const path = join(folder, name);
-    const old = await stat(path).then(({ mtimeMs }) => mtimeMs < now - ORPHAN_MS, () => false);
-    if (old) await rm(path, { recursive: true, force: true });
-  }
 }
 
 async function removeUnused(store: MediaStore, before: Date): Promise<void> {

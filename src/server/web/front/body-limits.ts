@@ -19,6 +19,8 @@ export interface BodyLimit {
 
 /** The first line whose pattern fits counts. Files of people are the only large bodies; a phone in a studio may be slow. */
 export const BODY_LIMITS: readonly BodyLimit[] = [
+  // A form without script sends a whole showing at once; more than a part of it is then refused photo by photo, with words.
+  { path: /^\/api\/photos$/, maxBytes: 151 * MIB, withinSeconds: 1_800 },
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?(?:photos?|pictures?)(?:\/|$)/, maxBytes: 30 * MIB, withinSeconds: 600 },
   { path: /^\/api\/(?:[a-z0-9/-]+\/)?videos?(?:\/|$)/, maxBytes: 20 * MIB, withinSeconds: 600 },
   { path: /^\/workroom\/series\/bring-in$/, maxBytes: 501 * MIB, withinSeconds: 1_800 },

@@ -38,7 +38,8 @@ describe('a body', () => {
     ['/workroom', MIB, 200], ['/workroom', MIB + 1, 413],
     ['/sign-in', 4_096, 200], ['/sign-in', 4_097, 413],
     ['/api/reckon', 65_536, 200], ['/api/reckon', 65_537, 413],
-    ['/api/photos', 30 * MIB, 200], ['/api/photos', 30 * MIB + 1, 413],
+    ['/api/photos', 60 * MIB, 200],
+    ['/api/photos/pieces/abc', 30 * MIB, 200], ['/api/photos/pieces/abc', 30 * MIB + 1, 413],
   ])('to %s of %i bytes is answered with %i, whether its length is told or not', async (path, bytes, status) => {
     const body = Buffer.alloc(bytes);
     const told = await front.ask(path, { method: 'POST', body });

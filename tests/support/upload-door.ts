@@ -1,4 +1,4 @@
-/** The door for videos behind the real front, over real connections that can be cut. */
+/** The doors for what comes in pieces, videos and photos, behind the real front, over real connections that can be cut. */
 import { createServer, request as httpRequest, type IncomingHttpHeaders } from 'node:http';
 import type { AddressInfo } from 'node:net';
 import { Readable } from 'node:stream';
@@ -21,7 +21,7 @@ export interface Sent {
   readonly cut?: { readonly after: number; hasArrived(): Promise<boolean> };
 }
 
-export interface VideoDoor {
+export interface UploadDoor {
   /** Who asks from now on. */
   ctx: Context;
   /** @returns null when the connection was cut. */
@@ -29,10 +29,20 @@ export interface VideoDoor {
   stop(): Promise<void>;
 }
 
+type Answering = (ctx: Context, request: Request) => Promise<Response>;
+
 /** A door as a process just started would have it: nothing is left in memory of the one before. */
-export async function openVideoDoor(ctx: Context): Promise<VideoDoor> {
+export async function openVideoDoor(ctx: Context): Promise<UploadDoor> {
   vi.resetModules();
-  const { answerVideoUpload } = await import('#server/web/video-uploads.ts');
+  return open(ctx, (await import('#server/web/video-uploads.ts')).answerVideoUpload);
+}
+
+export async function openPhotoDoor(ctx: Context): Promise<UploadDoor> {
+  vi.resetModules();
+  return open(ctx, (await import('#server/web/photo-uploads.ts')).answerPhotoUpload);
+}
+
+async function open(ctx: Context, answerUpload: Answering): Promise<UploadDoor> {
   const limit = limitBody();
   const server = createServer((request, response) => {
     limit(request, response, () => {
@@ -42,7 +52,7 @@ export async function openVideoDoor(ctx: Context): Promise<VideoDoor> {
         headers: Object.entries(request.headers).flatMap(([name, value]): [string, string][] => (typeof value === 'string' ? [[name, value]] : [])),
         ...(hasBody && { body: Readable.toWeb(request) as ReadableStream, duplex: 'half' }),
       } as RequestInit);
-      answerVideoUpload(door.ctx, asked).then(
+      answerUpload(door.ctx, asked).then(
         async (answer) => {
           response.writeHead(answer.status, Object.fromEntries(answer.headers));
           response.end(Buffer.from(await answer.arrayBuffer()));
@@ -53,7 +63,7 @@ export async function openVideoDoor(ctx: Context): Promise<VideoDoor> {
   });
   await new Promise<void>((resolve) => { server.listen(0, '127.0.0.1', resolve); });
   const { port } = server.address() as AddressInfo;
-  const door: VideoDoor = {
+  const door: UploadDoor = {
     ctx,
     send: (sent) => send(port, sent),
     stop: async () => {
@@ -84,7 +94,14 @@ const base64 = (words: string): string => Buffer.from(words).toString('base64');
 
 /** The head of a request that begins an upload. */
 export function beginning(lesson: string, byteCount: number | string, told: Readonly<Record<string, string>> = {}): Sent {
-  const metadata = { lesson, filename: 'rya.mp4', filetype: 'video/mp4', ...told };
+  return telling({ lesson, filename: 'rya.mp4', filetype: 'video/mp4', ...told }, byteCount);
+}
+
+export function beginningPhoto(at: { readonly series: string; readonly lesson: string }, byteCount: number): Sent {
+  return { ...telling({ ...at, filename: 'warped-loom.jpg' }, byteCount), path: '/api/photos/pieces' };
+}
+
+function telling(metadata: Readonly<Record<string, string>>, byteCount: number | string): Sent {
   return { method: 'POST', headers: { 'Upload-Length': String(byteCount), 'Upload-Metadata': Object.entries(metadata).map(([name, value]) => `${name} ${base64(value)}`).join(',') } };
 }
 
