@@ -1,5 +1,6 @@
 /** What a teacher or helper says of a photo, and the phrases and the promise of her workroom. */
 import { z } from 'astro/zod';
+import { PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { LONGEST_PHRASE, MOST_PHRASES, phrasesOf } from '#core/workroom/bench.ts';
 
 const Note = z.object({
@@ -7,6 +8,8 @@ const Note = z.object({
   /** Thousandths of the photo's width and height from the upper left; absent when the note is about the whole. */
   xPermille: z.number().int().min(0).max(1_000).nullable(),
   yPermille: z.number().int().min(0).max(1_000).nullable(),
+  /** Which shot of the showing it is about; without it the first. */
+  shot: z.number().int().min(1).max(PHOTO_LIMITS.maxShots).optional(),
 }).strict();
 export type NoteInput = z.output<typeof Note>;
 

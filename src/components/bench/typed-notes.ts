@@ -18,5 +18,6 @@ function noteOf(item: unknown): NoteInput[] {
     const value: unknown = name in item ? Object.entries(item).find(([key]) => key === name)?.[1] : null;
     return typeof value === 'number' && value >= 0 && value <= 1_000 ? value : null;
   };
-  return [{ words: item.words.slice(0, 600), xPermille: place('xPermille'), yPermille: place('yPermille') }];
+  const shot = 'shot' in item && typeof item.shot === 'number' && Number.isInteger(item.shot) && item.shot >= 1 ? { shot: item.shot } : {};
+  return [{ words: item.words.slice(0, 600), xPermille: place('xPermille'), yPermille: place('yPermille'), ...shot }];
 }

@@ -6,10 +6,12 @@ interface Props {
   answer: Answer;
   change: Dispatch<AnswerEvent>;
   error: string | undefined;
+  /** How many shots there are; with several, each note says which it is about. */
+  shotCount: number;
 }
 
 /** The words of each pin, beside its number. The words of a pin set by mouse take the focus. */
-export function PinnedNotes({ answer: { notes, chosen, reach }, change, error }: Props) {
+export function PinnedNotes({ answer: { notes, chosen, reach }, change, error, shotCount }: Props) {
   useEffect(() => { if (reach === 'note') document.getElementById(`note-${chosen + 1}`)?.focus(); }, [reach, chosen]);
   if (notes.length === 0) return <p className="small quiet bench-hint">Press on the photo, or the key P, to put a pin with a note.</p>;
   return (
@@ -19,7 +21,7 @@ export function PinnedNotes({ answer: { notes, chosen, reach }, change, error }:
           <li key={index}>
             <span className="no" aria-hidden="true">{index + 1}</span>
             <div className="field">
-              <label htmlFor={`note-${index + 1}`} className="hide">Note {index + 1}</label>
+              <label htmlFor={`note-${index + 1}`} className={shotCount > 1 ? 'small quiet' : 'hide'}>Note {index + 1}{shotCount > 1 && `, on photo ${note.shot ?? 1}`}</label>
               <div className="input">
                 <textarea
                   id={`note-${index + 1}`} rows={2} maxLength={600} required value={note.words}

@@ -9,6 +9,8 @@ interface Props {
   view: View;
   /** Width by height of the photo they are set in. */
   aspect: number;
+  /** Which shot of the showing is looked at, from 1. */
+  shot: number;
 }
 
 const STEP = 5;
@@ -16,11 +18,11 @@ const LARGE_STEP = 50;
 const ARROWS: Readonly<Record<string, readonly [number, number]>> = { ArrowLeft: [-1, 0], ArrowRight: [1, 0], ArrowUp: [0, -1], ArrowDown: [0, 1] };
 
 /** The pins on a photo: dragged by mouse or finger, moved by the arrow keys, further with Shift. */
-export function Pins({ answer: { notes, chosen, reach }, change, view, aspect }: Props) {
+export function Pins({ answer: { notes, chosen, reach }, change, view, aspect, shot }: Props) {
   useEffect(() => { if (reach === 'pin') document.getElementById(`pin-${chosen + 1}`)?.focus(); }, [reach, chosen]);
   return (
     <svg className="pins" aria-label="Pins on the photo" role="group">
-      {notes.map((note, index) => note.xPermille !== null && note.yPermille !== null && (
+      {notes.map((note, index) => (note.shot ?? 1) === shot && note.xPermille !== null && note.yPermille !== null && (
         <svg key={index} x={`${note.xPermille / 10}%`} y={`${note.yPermille / 10}%`} overflow="visible">
           <Pin {...{ index, change, view, aspect }} isChosen={index === chosen} />
         </svg>
@@ -29,7 +31,7 @@ export function Pins({ answer: { notes, chosen, reach }, change, view, aspect }:
   );
 }
 
-function Pin({ index, isChosen, change, view, aspect }: Omit<Props, 'answer'> & { index: number; isChosen: boolean }) {
+function Pin({ index, isChosen, change, view, aspect }: Omit<Props, 'answer' | 'shot'> & { index: number; isChosen: boolean }) {
   const drag = useRef<'down' | 'moved' | null>(null);
   const toWords = () => document.getElementById(`note-${index + 1}`)?.focus();
   const press = (event: KeyboardEvent) => {

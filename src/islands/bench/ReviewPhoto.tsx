@@ -6,6 +6,7 @@ import { PhotoFrame, type Shown } from '#islands/bench/PhotoFrame.tsx';
 import { Phrases } from '#islands/bench/Phrases.tsx';
 import { PinnedNotes } from '#islands/bench/PinnedNotes.tsx';
 import { Pins } from '#islands/bench/Pins.tsx';
+import { ShotStrip } from '#islands/bench/ShotStrip.tsx';
 import { useBenchKeys } from '#islands/bench/use-bench-keys.ts';
 import { closer, moved, onPhoto, STEP, turned, WHOLE } from '#islands/bench/view.ts';
 import { ViewBar } from '#islands/bench/ViewBar.tsx';
@@ -16,7 +17,9 @@ import { typedBefore } from '#islands/ui/typed-before.ts';
 export interface ReviewPhotoProps {
   /** Address the verdict is posted to. */
   action: string;
-  photo: Shown & { publicId: string };
+  publicId: string;
+  /** The photos shown together, at least one. */
+  shots: readonly Shown[];
   /** What she has shown before, the newest first, each with the words it is called by. */
   earlier: readonly (Shown & { says: string })[];
   studentName: string;
@@ -35,17 +38,23 @@ type Verdict = 'weave-on' | 'mend-first';
 /** How far one press of an arrow key moves a photo that is closer than its frame, as a share of it. */
 const PAN = 0.12;
 
+const NOTHING_SHOWN: Shown = { src: '', width: 4, height: 3, alt: '' };
+
 const goTo = (address: string | null): void => { if (address !== null) location.assign(address); };
 
 /** The photo at the bench: how it is looked at, pins by mouse, finger or keys, words and phrases, and the verdict. */
-export function ReviewPhoto({ action, photo, earlier, studentName, phrases, typed, errors, next, before, after }: ReviewPhotoProps) {
+export function ReviewPhoto({ action, publicId, shots, earlier, studentName, phrases, typed, errors, next, before, after }: ReviewPhotoProps) {
   const [answer, change] = useReducer(answerAfter, newAnswer(typed.words, typed.notes));
   const [view, look] = useState(WHOLE);
+  const [at, setAt] = useState(0);
   const [beside, setBeside] = useState(-1);
   const [keysShown, showKeys] = useState(false);
   const [alive, setAlive] = useState(false);
   const form = useRef<HTMLFormElement>(null);
   const sent = useRef(false);
+  const photo = shots[at] ?? NOTHING_SHOWN;
+  const shot = at + 1;
+  const onShot = at === 0 ? {} : { shot };
   const aspect = photo.width / photo.height;
   const laid = earlier[beside];
 
@@ -54,7 +63,8 @@ export function ReviewPhoto({ action, photo, earlier, studentName, phrases, type
     setAlive(true);
   }, []);
 
-  const put = () => change({ kind: 'put', by: 'key', ...(onPhoto(view, aspect, { x: 0, y: 0 }) ?? { xPermille: 500, yPermille: 500 }) });
+  const put = () => change({ kind: 'put', by: 'key', ...onShot, ...(onPhoto(view, aspect, { x: 0, y: 0 }) ?? { xPermille: 500, yPermille: 500 }) });
+  const lookAt = (index: number) => { setAt(index); look(WHOLE); };
   const layNext = () => setBeside((at) => (at + 1 < earlier.length ? at + 1 : -1));
   const say = (verdict: Verdict) => form.current?.requestSubmit(form.current.querySelector<HTMLElement>(`button[value="${verdict}"]`));
   useBenchKeys({
@@ -63,6 +73,7 @@ export function ReviewPhoto({ action, photo, earlier, studentName, phrases, type
     'z': () => document.querySelector<HTMLFormElement>('form[data-take-back]')?.requestSubmit(),
     'j': () => goTo(after),
     'k': () => goTo(before),
+    'n': () => lookAt((at + 1) % shots.length),
     'p': put,
     't': () => form.current?.querySelector<HTMLElement>('textarea[name="words"]')?.focus(),
     'c': layNext,
@@ -79,19 +90,20 @@ export function ReviewPhoto({ action, photo, earlier, studentName, phrases, type
     <div className="bench-work" data-alive={alive || undefined}>
       <div className={laid === undefined ? 'panes' : 'panes is-beside'}>
         <figure>
-          <PhotoFrame {...{ photo, view, look }} onPress={(at, by) => { const place = onPhoto(view, aspect, at); if (place !== null) change({ kind: 'put', by, ...place }); }}>
-            <Pins {...{ answer, change, view, aspect }} />
+          <PhotoFrame {...{ photo, view, look }} onPress={(pressed, by) => { const place = onPhoto(view, aspect, pressed); if (place !== null) change({ kind: 'put', by, ...onShot, ...place }); }}>
+            <Pins {...{ answer, change, view, aspect, shot }} />
           </PhotoFrame>
           {laid !== undefined && <figcaption className="small">In hand</figcaption>}
         </figure>
         {laid !== undefined && <figure><PhotoFrame photo={laid} view={view} look={look} /><figcaption className="small">{laid.says}</figcaption></figure>}
       </div>
+      {shots.length > 1 && <ShotStrip {...{ shots, at, lookAt, answer }} />}
       {alive && <ViewBar {...{ view, look, aspect }} onPin={put} onKeys={() => showKeys(true)} beside={earlier.length === 0 ? null : { says: besideWords(beside, earlier.length), next: layNext }} />}
       <form ref={form} method="post" action={action} className="bench-form" onSubmit={(event) => { if (sent.current) event.preventDefault(); sent.current = true; }}>
-        <input type="hidden" name="photo" value={photo.publicId} />
+        <input type="hidden" name="photo" value={publicId} />
         {next !== null && <input type="hidden" name="next" value={next} />}
         <input type="hidden" name="notes" value={JSON.stringify(answer.notes)} />
-        <PinnedNotes {...{ answer, change }} error={errors.notes} />
+        <PinnedNotes {...{ answer, change }} error={errors.notes} shotCount={shots.length} />
         <TextField
           name="words" label={`To ${studentName}`} hint="Goes into the letter, above the notes." error={errors.words} maxLength={2_000} optional
           value={answer.words} onChange={(event) => change({ kind: 'write', words: event.target.value })} onFocus={() => change({ kind: 'choose', index: -1 })}

@@ -14,7 +14,7 @@ export interface Answer {
 
 export type AnswerEvent =
   /** By key the pin itself is in hand next, by mouse the words of its note; a finger keeps the photo in sight. */
-  | { readonly kind: 'put'; readonly xPermille: number; readonly yPermille: number; readonly by: 'key' | 'mouse' | 'touch' }
+  | { readonly kind: 'put'; readonly xPermille: number; readonly yPermille: number; readonly shot?: number; readonly by: 'key' | 'mouse' | 'touch' }
   | { readonly kind: 'place'; readonly index: number; readonly xPermille: number; readonly yPermille: number }
   | { readonly kind: 'nudge'; readonly index: number; readonly dx: number; readonly dy: number }
   | { readonly kind: 'choose'; readonly index: number }
@@ -38,7 +38,7 @@ export function answerAfter(answer: Answer, event: AnswerEvent): Answer {
   switch (event.kind) {
     case 'put':
       if (notes.length >= MOST_PINS) return answer;
-      return { ...answer, notes: [...notes, { words: '', xPermille: within(event.xPermille), yPermille: within(event.yPermille) }], chosen: notes.length, reach: REACH[event.by] };
+      return { ...answer, notes: [...notes, { words: '', xPermille: within(event.xPermille), yPermille: within(event.yPermille), ...(event.shot !== undefined && { shot: event.shot }) }], chosen: notes.length, reach: REACH[event.by] };
     case 'place':
       return { ...answer, notes: changed(event.index, (note) => ({ ...note, xPermille: within(event.xPermille), yPermille: within(event.yPermille) })), chosen: event.index, reach: null };
     case 'nudge':

@@ -6,6 +6,7 @@ export const BENCH_KEYS = [
   { key: 'z', cap: 'Z', says: 'Take the last verdict back, within ten seconds' },
   { key: 'j', cap: 'J', says: 'Next photo' },
   { key: 'k', cap: 'K', says: 'Back to the one before' },
+  { key: 'n', cap: 'N', says: 'The next of several photos shown together' },
   { key: 'p', cap: 'P', says: 'Put a pin; arrows move it, with Shift further; Enter goes to its words' },
   { key: 't', cap: 'T', says: 'Write to the student' },
   { key: 'c', cap: 'C', says: 'Lay an earlier photo beside it; again for one before that' },

@@ -1,20 +1,23 @@
 import { useEffect, useState, type SyntheticEvent } from 'react';
+import { PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { Button } from '#islands/ui/Button.tsx';
 import { Field, TextField } from '#islands/ui/Field.tsx';
 import { Wrong } from '#islands/ui/Wrong.tsx';
+import { carryPhoto, showOnServer } from './carry-photo.ts';
 import { DropPhoto } from './DropPhoto.tsx';
-import { PHOTO_ACCEPT } from './photo-rules.ts';
+import { PHOTO_ACCEPT, sentOf } from './photo-rules.ts';
 import { ShotOnItsWay } from './ShotOnItsWay.tsx';
-import type { StartUpload } from './uploader.ts';
-import { startUppyUpload } from './uppy-uploader.ts';
-import { useUpload } from './use-upload.ts';
+import { bytesOf, type Showing } from './showing.ts';
+import type { Show, StartUpload } from './uploader.ts';
+import { useShowing } from './use-showing.ts';
 
-interface PhotoUploadProps {
+export interface PhotoUploadProps {
   series: string;
-  /** Public id of the lesson. */
+  /** Public id of the lesson with the checkpoint. */
   lesson: string;
+  /** Number of the part: where a form without script goes back to. */
   part: number;
-  /** Who looks at it, by first name. */
+  /** First name of the teacher. */
   teacher: string;
   /** When an answer comes: said once the photo is there. */
   answerWords: string;
@@ -26,6 +29,7 @@ interface PhotoUploadProps {
   fault?: string | undefined;
   words?: string | undefined;
   start?: StartUpload;
+  show?: Show;
   /** Shows what the server has now. */
   onSent?: () => void;
 }
@@ -33,25 +37,26 @@ interface PhotoUploadProps {
 const showThread = (): void => { window.location.reload(); };
 
 /**
- * Showing a photo: dropped, chosen or taken. The form under it sends it without script as well; with script it can be
- * watched on its way, and goes on by itself when the line drops.
+ * Showing photos: dropped, chosen or taken, cut and turned. The form under it sends them without script as well; with
+ * script they can be watched on their way, and go on by themselves when the line drops.
  */
-export function PhotoUpload({ series, lesson, part, teacher, answerWords, again, open, fault, words = '', start = startUppyUpload, onSent = showThread }: PhotoUploadProps) {
+export function PhotoUpload({ series, lesson, part, teacher, answerWords, again, open, fault, words = '', start = carryPhoto, show = showOnServer, onSent = showThread }: PhotoUploadProps) {
   const [live, setLive] = useState(false);
   useEffect(() => setLive(true), []);
-  const { state, choose, send, stop, putAway } = useUpload(start, fault);
-  const isSent = state.at === 'sent';
+  const { state, add, replace, putAway, send, stop } = useShowing({ series, lesson }, start, show, fault);
+  const isShown = state.at === 'shown';
   useEffect(() => {
-    if (isSent) onSent();
-  }, [isSent, onSent]);
+    if (isShown) onSent();
+  }, [isShown, onSent]);
   const onSubmit = (event: SyntheticEvent<HTMLFormElement>): void => {
     if (!live) return;
     event.preventDefault();
     // Read from the page, not from state: she may have written before the script was there.
     const said = new FormData(event.currentTarget).get('words');
-    if (state.at === 'chosen') send({ series, lesson, words: typeof said === 'string' ? said : '' });
+    if (state.at === 'choosing') send(typeof said === 'string' ? said : '');
   };
-  const faultNow = state.at === 'choosing' ? state.fault : undefined;
+  const moving = state.at === 'sending' || state.at === 'waiting';
+  const { length: count } = state.shots;
   const title = again ? 'Send another photo' : 'Send your photo';
   return (
     <details className="send-photo" open={open}>
@@ -60,27 +65,43 @@ export function PhotoUpload({ series, lesson, part, teacher, answerWords, again,
         <input type="hidden" name="series" value={series} />
         <input type="hidden" name="lesson" value={lesson} />
         <input type="hidden" name="back" value={part} />
-        {/* The words stand before the file: when the file is not taken, what came before it is kept. */}
+        {/* The words stand before the files: when a file is not taken, what came before it is kept. */}
         <TextField name="words" form="photo" label={`What should ${teacher} know?`} optional rows={2} maxLength={1000} defaultValue={words} />
         {live ? (
           <>
-            {state.at === 'choosing' && <DropPhoto onPhoto={choose} />}
-            {'file' in state && <ShotOnItsWay state={state} teacher={teacher} answerWords={answerWords} onStop={stop} />}
-            {faultNow !== undefined && <div role="alert"><Wrong id="photo-wrong" says={faultNow} /></div>}
-            {state.at === 'chosen' && (
-              <p className="row">
-                <Button type="submit" kind="act" glyph="send">Send to {teacher}</Button>
-                <Button kind="quiet" glyph="photo" onClick={putAway}>Take another</Button>
-              </p>
+            {count > 0 && (
+              <ul className="shots-in-hand" role="list">
+                {state.shots.map((shot) => <ShotOnItsWay key={shot.key} {...{ shot, moving }} onCut={(file) => replace(shot.key, file)} onPutAway={() => putAway(shot.key)} />)}
+              </ul>
             )}
+            {count > 0 && <p className="small quiet" role="status">{wordsOf(state, teacher, answerWords)}</p>}
+            {state.at === 'choosing' && count < PHOTO_LIMITS.maxShots && <DropPhoto onPhotos={add} more={count > 0} />}
+            {state.fault !== undefined && <div role="alert"><Wrong id="photo-wrong" says={state.fault} /></div>}
+            {state.at === 'choosing' && count > 0 && <p><Button type="submit" kind="act" glyph="send">{count === 1 ? `Send to ${teacher}` : `Send ${count} photos to ${teacher}`}</Button></p>}
+            {moving && <p><Button kind="quiet" glyph="close" onClick={stop}>Stop sending</Button></p>}
           </>
         ) : (
           <>
-            <Field name="photo" form="photo" type="file" accept={PHOTO_ACCEPT} label="Photo" hint="JPEG, PNG or WebP, up to 25 MB." error={fault} required />
+            <Field name="photo" form="photo" type="file" multiple accept={PHOTO_ACCEPT} label="Photos" hint={`One, or up to ${PHOTO_LIMITS.maxShots} together. JPEG, PNG or WebP, up to 25 MB each.`} error={fault} required />
             <p><Button type="submit" kind="act" glyph="send">Send to {teacher}</Button></p>
           </>
         )}
       </form>
     </details>
   );
+}
+
+function wordsOf(state: Showing, teacher: string, answerWords: string): string {
+  switch (state.at) {
+    case 'choosing':
+      return 'Not sent yet.';
+    case 'sending':
+      return 'It goes on by itself if the line drops.';
+    case 'waiting': {
+      const { sent, total } = bytesOf(state);
+      return `Waits for signal. The line dropped at ${sentOf(sent, total)}. It goes on from there by itself.`;
+    }
+    case 'shown':
+      return `${teacher} has your ${state.shots.length === 1 ? 'photo' : `${state.shots.length} photos`}. ${answerWords}`;
+  }
 }

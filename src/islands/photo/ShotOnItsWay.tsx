@@ -1,47 +1,34 @@
 import { useEffect, useState } from 'react';
-import { IconButton } from '#islands/ui/Button.tsx';
+import { Button, IconButton } from '#islands/ui/Button.tsx';
 import { Throw } from '#islands/ui/Throw.tsx';
+import { CutPhoto } from './CutPhoto.tsx';
 import { megabytes, sentOf } from './photo-rules.ts';
-import type { UploadState } from './upload-state.ts';
-
-type WithFile = Extract<UploadState, { file: File }>;
+import type { Shot } from './showing.ts';
 
 interface ShotProps {
-  state: WithFile;
-  teacher: string;
-  answerWords: string;
-  onStop: () => void;
+  shot: Shot;
+  /** On its way to the server, or waiting for signal. */
+  moving: boolean;
+  onCut: (file: File) => void;
+  onPutAway: () => void;
 }
 
-/** The photo in hand: how it looks, and how far it has come. */
-export function ShotOnItsWay({ state, teacher, answerWords, onStop }: ShotProps) {
-  const { file } = state;
+/** One photo in hand: how it looks, how far it has come, and what can still be done to it. */
+export function ShotOnItsWay({ shot: { file, sent, isThere }, moving, onCut, onPutAway }: ShotProps) {
+  const [cutting, setCutting] = useState(false);
   const src = useObjectUrl(file);
-  const moving = state.at === 'sending' || state.at === 'waiting';
   return (
-    <div className="shot">
+    <li className="shot">
       <div className="thumb">{src !== undefined && <img src={src} alt="" />}</div>
       <div>
-        <p><b className="shot-name">{file.name}</b> <span className="small quiet num">{moving ? sentOf(state.sent, file.size) : megabytes(file.size)}</span></p>
-        {moving && <Throw label={file.name} done={state.sent / file.size} />}
-        <p className="small quiet" role="status">{wordsOf(state, teacher, answerWords)}</p>
+        <p><b className="shot-name">{file.name}</b> <span className="small quiet num">{moving && !isThere ? sentOf(sent, file.size) : megabytes(file.size)}</span></p>
+        {moving && <Throw label={file.name} done={isThere ? 1 : sent / file.size} />}
+        {!moving && <p><Button small kind="quiet" glyph="scissors" onClick={() => setCutting(true)}>Cut and turn<span className="hide"> {file.name}</span></Button></p>}
       </div>
-      {moving && <IconButton glyph="close" label="Stop sending this photo" onClick={onStop} />}
-    </div>
+      {!moving && <IconButton glyph="close" label={`Put ${file.name} away`} onClick={onPutAway} />}
+      {cutting && <CutPhoto file={file} onDone={(cut) => { setCutting(false); if (cut !== undefined) onCut(cut); }} />}
+    </li>
   );
-}
-
-function wordsOf(state: WithFile, teacher: string, answerWords: string): string {
-  switch (state.at) {
-    case 'chosen':
-      return 'Not sent yet.';
-    case 'sending':
-      return 'It goes on by itself if the line drops.';
-    case 'waiting':
-      return `Waits for signal. The line dropped at ${sentOf(state.sent, state.file.size)}. It is sent again by itself.`;
-    case 'sent':
-      return `${teacher} has your photo. ${answerWords}`;
-  }
 }
 
 /** An address for a file on the device, given back when it is no longer shown. */

@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useReducer, useRef } from 'react';
 import type { VideoOnItsWay } from '#contracts/video.ts';
 import { videoFault } from '#core/video/limits.ts';
-import { useTryingAgain } from '#islands/photo/use-trying-again.ts';
+import { useTryingAgain } from '#islands/uploading/use-trying-again.ts';
 import { videoUploadAfter, type VideoUploadState } from './video-upload-state.ts';
 import type { StartVideoUpload, VideoTarget, VideoUpload } from './video-uploader.ts';
 

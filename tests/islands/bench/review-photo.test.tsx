@@ -37,7 +37,7 @@ const EARLIER = [{ src: '/e.webp', width: 3, height: 2, alt: 'Earlier photo', sa
 
 function bench(given: Partial<ReviewPhotoProps> = {}) {
   return render(<main><ReviewPhoto
-    action="?_action=bench.giveVerdict" photo={{ publicId: 'one', src: '/p.webp', width: 600, height: 400, alt: 'Photo by Maud' }} earlier={EARLIER} studentName="Maud"
+    action="?_action=bench.giveVerdict" publicId="one" shots={[{ src: '/p.webp', width: 600, height: 400, alt: 'Photo by Maud' }]} earlier={EARLIER} studentName="Maud"
     phrases={['Tension is even', 'Card sits too high']} typed={{ words: '', notes: [] }} errors={{}} next="two" before={null} after={null} {...given}
   /></main>);
 }
@@ -50,6 +50,19 @@ describe('by keys alone', () => {
     bench();
     await press('12w');
     expect(sent).toEqual([{ photo: 'one', next: 'two', notes: '[]', words: 'Tension is even. Card sits too high', verdict: 'weave-on' }]);
+  });
+
+  test('N takes the next of several photos shown together, and pins belong to the one they were put in', async () => {
+    bench({ shots: [{ src: '/p.webp', width: 600, height: 400, alt: 'Photo 1' }, { src: '/q.webp', width: 400, height: 600, alt: 'Photo 2' }] });
+    await press('n');
+    expect(screen.getByRole('img', { name: 'Photo 2' })).toBeDefined();
+    await press('p{Enter}Slack here');
+    expect(screen.getByRole('button', { name: 'Photo 2, one pin', pressed: true })).toBeDefined();
+    expect(screen.getByRole('textbox', { name: 'Note 1, on photo 2' })).toBeDefined();
+    await userEvent.click(screen.getByRole('button', { name: 'Photo 1' }));
+    expect(pins()).toHaveLength(0);
+    await press('{Escape}m');
+    expect(JSON.parse(sent[0]?.['notes'] ?? '')).toMatchObject([{ words: 'Slack here', shot: 2 }]);
   });
 
   test('a second press sends nothing more', async () => {

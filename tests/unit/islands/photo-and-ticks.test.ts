@@ -1,6 +1,7 @@
 import { describe, expect, test, vi } from 'vitest';
 import { photoFault, sentOf } from '#islands/photo/photo-rules.ts';
-import { uploadAfter, type UploadState } from '#islands/photo/upload-state.ts';
+import { cornerAt, cutPixels, jpegName, placeOf, turned, UNCUT } from '#islands/photo/cut.ts';
+import { emptyShowing, showingAfter, type Showing, type ShowingEvent } from '#islands/photo/showing.ts';
 import { TickQueue, type SendAnswer, type TickChange } from '#islands/ticks/tick-queue.ts';
 
 const change = (id: string, ticked = true): TickChange => ({ id, body: { ticked, changedAt: '2026-12-01T10:00:00Z' } });
@@ -90,23 +91,60 @@ describe('what is taken as a photo', () => {
   });
 });
 
-describe('a photo on its way', () => {
-  const file = new File(['x'], 'loom.jpg', { type: 'image/jpeg' });
-  const after = (...events: Parameters<typeof uploadAfter>[1][]): UploadState => events.reduce(uploadAfter, { at: 'choosing' });
+describe('photos on their way', () => {
+  const file = (name = 'loom.jpg', type = 'image/jpeg') => new File(['x'], name, { type });
+  const after = (...events: readonly ShowingEvent[]): Showing => events.reduce(showingAfter, emptyShowing());
+  const two: ShowingEvent = { kind: 'add', files: [file('front.jpg'), file('side.jpg')] };
 
-  test('waits where the line dropped, counts the tries, and goes on', () => {
-    const dropped = after({ kind: 'choose', file }, { kind: 'send' }, { kind: 'progress', sent: 5 }, { kind: 'dropped' });
-    expect(dropped).toMatchObject({ at: 'waiting', sent: 5, tries: 1 });
-    expect(uploadAfter(dropped, { kind: 'dropped' })).toMatchObject({ tries: 2 });
-    expect(uploadAfter(dropped, { kind: 'progress', sent: 1 })).toMatchObject({ at: 'sending', sent: 1 });
+  test('wait where the line dropped, count the tries, and go on', () => {
+    const dropped = after(two, { kind: 'send' }, { kind: 'progress', key: 1, sent: 5 }, { kind: 'dropped' });
+    expect(dropped).toMatchObject({ at: 'waiting', tries: 1, shots: [{ sent: 5 }, { sent: 0 }] });
+    expect(showingAfter(dropped, { kind: 'dropped' })).toMatchObject({ tries: 2 });
+    expect(showingAfter(dropped, { kind: 'progress', key: 1, sent: 1 })).toMatchObject({ at: 'sending', tries: 0 });
   });
 
-  test('stopped, it is still chosen; refused, another is asked for with the reason', () => {
-    expect(after({ kind: 'choose', file }, { kind: 'send' }, { kind: 'stop' })).toEqual({ at: 'chosen', file });
-    expect(after({ kind: 'choose', file }, { kind: 'send' }, { kind: 'refused', says: 'No.' })).toEqual({ at: 'choosing', fault: 'No.' });
+  test('stopped, they are still chosen, and what has come stays there', () => {
+    expect(after(two, { kind: 'send' }, { kind: 'there', key: 1, shot: 'a' }, { kind: 'stop' })).toMatchObject({ at: 'choosing', shots: [{ shot: 'a', isThere: true }, { isThere: false }] });
   });
 
-  test('news of an upload that was put away changes nothing', () => {
-    expect(after({ kind: 'choose', file }, { kind: 'put-away' }, { kind: 'progress', sent: 9 }, { kind: 'done' })).toEqual({ at: 'choosing' });
+  test('one that is refused goes, by its name, and the others stay', () => {
+    expect(after(two, { kind: 'send' }, { kind: 'refused', key: 2, says: 'It is damaged.' })).toMatchObject({ at: 'choosing', fault: 'side.jpg: It is damaged.', shots: [{ key: 1 }] });
+    expect(after({ kind: 'add', files: [file()] }, { kind: 'send' }, { kind: 'refused', key: 1, says: 'No.' })).toMatchObject({ fault: 'No.', shots: [] });
+  });
+
+  test('what cannot be sent is told by name, the rest is chosen; a seventh is one too many', () => {
+    expect(after({ kind: 'add', files: [file('notes.pdf', 'application/pdf'), file()] })).toMatchObject({ fault: expect.stringMatching(/^notes\.pdf: .*Use JPEG/) as unknown, shots: [{ key: 1 }] });
+    expect(after({ kind: 'add', files: Array.from({ length: 7 }, () => file()) })).toMatchObject({ fault: expect.stringContaining('At most 6') as unknown, shots: { length: 6 } });
+  });
+
+  test('cut anew, nothing of it has been sent', () => {
+    expect(after(two, { kind: 'send' }, { kind: 'there', key: 1, shot: 'a' }, { kind: 'stop' }, { kind: 'replace', key: 1, file: file('cut.jpg') }).shots[0]).toMatchObject({ shot: null, sent: 0, isThere: false });
+  });
+
+  test('news of one that was put away changes nothing', () => {
+    expect(after(two, { kind: 'put-away', key: 1 }, { kind: 'progress', key: 1, sent: 9 }, { kind: 'dropped' })).toMatchObject({ at: 'choosing', shots: [{ key: 2, sent: 0 }] });
+  });
+});
+
+describe('cutting a photo', () => {
+  test('turned by quarters, the same part stays in the cut, and four turns are none', () => {
+    const upper = cornerAt(UNCUT, 'lower right', 1_000, 250);
+    expect(turned(upper)).toEqual({ turns: 1, left: 750, top: 0, right: 1_000, bottom: 1_000 });
+    expect(turned(turned(turned(turned(upper))))).toEqual(upper);
+  });
+
+  test('a corner stops at the edge of the photo, and short of the one across', () => {
+    expect(cornerAt(UNCUT, 'upper left', -50, 2_000)).toEqual({ ...UNCUT, left: 0, top: 900 });
+    expect(placeOf(cornerAt(UNCUT, 'lower left', 300, 700), 'lower left')).toEqual({ x: 300, y: 700 });
+  });
+
+  test('keeps the points of the part, turned sides changed over, and draws no side over 4096 points', () => {
+    expect(cutPixels(cornerAt(UNCUT, 'upper left', 500, 500), 4_000, 2_000)).toMatchObject({ x: 2_000, y: 1_000, width: 2_000, height: 1_000, scale: 1 });
+    expect(cutPixels(turned(UNCUT), 4_000, 2_000)).toMatchObject({ turnedWidth: 2_000, width: 2_000, height: 4_000 });
+    expect(cutPixels(UNCUT, 8_192, 4_096)).toMatchObject({ width: 4_096, height: 2_048, scale: 0.5 });
+  });
+
+  test('what is drawn anew is called a JPEG', () => {
+    expect([jpegName('warped.loom.heic'), jpegName('.png'), jpegName('loom')]).toEqual(['warped.loom.jpg', 'photo.jpg', 'loom.jpg']);
   });
 });

@@ -5,7 +5,7 @@ import type { NoteInput } from '#contracts/bench.ts';
 import type { Actor } from '#server/context.ts';
 import { HeldVerdict, ProgressPhoto, User } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
-import { photoThread, type ThreadPhoto } from '#server/queries/photos/photo-thread.ts';
+import { photoThread, type ThreadPhoto, type ThreadShot } from '#server/queries/photos/photo-thread.ts';
 import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
 import { phrasesOfWorkroom } from './phrases-of.ts';
 import { waitingPhotos, type WaitingPhoto } from './waiting-photos.ts';
@@ -28,6 +28,8 @@ export interface PhotoInHand {
   readonly thread: readonly ThreadPhoto[];
   /** Index of the photo in hand among them: newer ones may wait behind it. */
   readonly placeInThread: number;
+  /** Shown together: the photo in hand and those beside it. */
+  readonly shots: readonly ThreadShot[];
   /** Of the whole seat, the newest first, without the one in hand. */
   readonly earlier: readonly EarlierPhoto[];
   readonly phrases: readonly string[];
@@ -53,9 +55,10 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
     takenBackOf(actor, photo.publicId),
   ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
+  const placeInThread = thread.findIndex(({ publicId }) => publicId === photo.publicId);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread: thread.findIndex(({ publicId }) => publicId === photo.publicId), earlier, phrases, takenBack },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack },
   };
 }
 

@@ -7,13 +7,11 @@ import type { MyPiece } from '#core/craft/fit.ts';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 import { workroomsOf } from '#server/policies/workroom.ts';
-import type { MediaFiles } from '#contracts/media.ts';
 import { PART_NUMBER } from '#server/queries/lessons/part-number.ts';
 
 export interface WaitingPhoto {
   readonly publicId: string;
   readonly mediaId: string;
-  readonly files: MediaFiles;
   readonly words: string;
   readonly postedAt: Date;
   readonly studentName: string;
@@ -35,7 +33,7 @@ export interface WaitingPhoto {
 const WAITS = `p.verdict = 'waits' AND NOT EXISTS (SELECT 1 FROM held_verdicts h WHERE h.photo_id = p.id AND h.goes_out_at IS NOT NULL)`;
 
 const SELECT = `
-  SELECT p.public_id AS publicId, m.public_id AS mediaId, m.files, p.words, p.created_at AS postedAt,
+  SELECT p.public_id AS publicId, m.public_id AS mediaId, p.words, p.created_at AS postedAt,
          u.name AS studentName, u.units AS studentUnits, e.id AS enrolmentId,
          s.id AS seriesId, s.slug AS seriesSlug, s.title AS seriesTitle,
          l.id AS lessonId, l.title AS partTitle, l.checkpoint,

@@ -1,5 +1,7 @@
 import { useEffect, type RefObject } from 'react';
-import { waitMs } from './upload-state.ts';
+
+/** Between tries while there is no signal: 4 s, 8 s, 16 s, then every 30 s. */
+export const waitMs = (tries: number): number => Math.min(30_000, 2_000 * 2 ** tries);
 
 /** Takes up an upload that was dropped: after a wait that grows with `tries`, or as soon as there is a line again. */
 export function useTryingAgain(upload: RefObject<{ again(): void } | null>, tries: number): void {
