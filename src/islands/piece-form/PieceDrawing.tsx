@@ -1,10 +1,11 @@
 import { memo, useMemo, useState } from 'react';
 import { hangingBox, loomBox } from '#core/craft/cloth/cloth-box.ts';
 import { wovenHeightMm, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
-import type { ClothView } from '#core/craft/cloth/cloth-view.ts';
-import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
+import type { LayeredView } from '#core/craft/cloth/draw-cloth.ts';
 import type { HeldBand } from '#core/craft/piece-form/band-height.ts';
+import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { Units } from '#core/units/units.ts';
+import { LiveCloth, useLayeredCloth } from '#islands/cloth/LiveCloth.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { DrawnBands, type DrawnMade } from './DrawnBands.tsx';
 import { Ruler } from './Ruler.tsx';
@@ -12,7 +13,8 @@ import { Ruler } from './Ruler.tsx';
 interface PieceDrawingProps {
   /** Null while nothing could be woven yet. */
   readonly cloth: WovenPiece | null;
-  readonly made: DrawnMade | null;
+  /** What was typed comes along for the ids of its bands. */
+  readonly made: (DrawnMade & { readonly typed: TypedPiece }) | null;
   /** It shows the piece as it was before something stopped working. */
   readonly isOld: boolean;
   /** Place of the chosen band among the piece's bands; −1 for none. */
@@ -44,17 +46,17 @@ export const PieceDrawing = memo(function PieceDrawing({ cloth, made, isOld, cho
   );
 });
 
-function Stage({ cloth, made, way, units, chosen, isOld, onChoose, onPull, onRest }: Omit<PieceDrawingProps, 'cloth' | 'made'> & { readonly cloth: WovenPiece; readonly made: DrawnMade; readonly way: Way }) {
-  const view = useMemo((): ClothView => ({ id: 'piece', as: way, width: WIDTH, units }), [way, units]);
-  const markup = useMemo(() => ({ __html: drawCloth(cloth, view) }), [cloth, view]);
+type StageProps = Omit<PieceDrawingProps, 'cloth' | 'made'> & { readonly cloth: WovenPiece; readonly made: NonNullable<PieceDrawingProps['made']>; readonly way: Way };
+
+function Stage({ cloth, made, way, units, chosen, isOld, onChoose, onPull, onRest }: StageProps) {
+  const view = useMemo((): LayeredView => ({ id: 'piece', as: way, width: WIDTH, units }), [way, units]);
+  const drawn = useLayeredCloth(cloth, view);
   const box = useMemo(() => (way === 'loom' ? loomBox(cloth, WIDTH) : hangingBox(cloth, WIDTH)), [cloth, way]);
-  const height = Number(/ height="([\d.]+)"/.exec(markup.__html)?.[1] ?? 0);
-  // The markup is our own: checked colours, escaped words, no scripts.
   return (
     <div className="stage">
-      <Ruler box={box} heightMm={wovenHeightMm(cloth)} pictureHeight={height} units={units} />
-      <div className="cloth" dangerouslySetInnerHTML={markup} />
-      {!isOld && <DrawnBands {...{ made, cloth, box, chosen, onChoose, onPull, onRest }} pictureWidth={WIDTH} pictureHeight={height} />}
+      <Ruler box={box} heightMm={wovenHeightMm(cloth)} pictureHeight={drawn.height} units={units} />
+      <LiveCloth drawn={drawn} idOf={(band) => made.typed.bands[band]?.id} />
+      {!isOld && <DrawnBands {...{ made, cloth, box, chosen, onChoose, onPull, onRest }} pictureWidth={WIDTH} pictureHeight={drawn.height} />}
     </div>
   );
 }

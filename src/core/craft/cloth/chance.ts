@@ -11,3 +11,10 @@ export function chanceFrom(seed: number): () => number {
     return state / 4294967296;
   };
 }
+
+/** A seed for one of many things that are varied each by itself: of the whole's own seed and the thing's name (FNV-1a). */
+export function seedFrom(seed: number, name: string): number {
+  let sum = (Math.trunc(seed) >>> 0) ^ 0x811c9dc5;
+  for (let at = 0; at < name.length; at++) sum = Math.imul(sum ^ name.charCodeAt(at), 0x01000193);
+  return sum >>> 0;
+}

@@ -39,11 +39,23 @@ export function box(x: number, y: number, width: number, height: number, fill: s
   return `<path d="M${num(x)} ${num(y)}h${num(width)}v${num(height)}h${num(-width)}z" fill="${fill}"/>`;
 }
 
+/** Draws lines in one colour and thickness. */
+export interface Strokes {
+  readonly stroke: (d: string, colour: string, width: number, more?: string) => string;
+}
+
+const lookOf = (colour: string, width: number, more: string): string => ` stroke="${colour}" stroke-width="${num(width)}"${more}`;
+
+/** Every line written out where it lies: longer, but it needs no ids, so a part of the drawing can be changed by itself. */
+export const WRITTEN_OUT: Strokes = {
+  stroke: (d, colour, width, more = '') => (d === '' ? '' : `<path d="${d}"${lookOf(colour, width, more)}/>`),
+};
+
 /** A path shorter than this costs less written twice than kept. */
 const WORTH_KEEPING = 90;
 
-/** Strokes paths and keeps the long ones in `defs`, under ids that begin with `prefix`. */
-export class PathStore {
+/** Keeps long lines in `defs`, under ids that begin with `prefix`. */
+export class PathStore implements Strokes {
   readonly #prefix: string;
   readonly #kept = new Map<string, string>();
 
@@ -53,14 +65,13 @@ export class PathStore {
 
   stroke(d: string, colour: string, width: number, more = ''): string {
     if (d === '') return '';
-    const look = ` stroke="${colour}" stroke-width="${num(width)}"${more}`;
-    if (d.length < WORTH_KEEPING) return `<path d="${d}"${look}/>`;
+    if (d.length < WORTH_KEEPING) return WRITTEN_OUT.stroke(d, colour, width, more);
     let id = this.#kept.get(d);
     if (id === undefined) {
       id = `${this.#prefix}-${this.#kept.size.toString(36)}`;
       this.#kept.set(d, id);
     }
-    return `<use href="#${id}"${look}/>`;
+    return `<use href="#${id}"${lookOf(colour, width, more)}/>`;
   }
 
   /** What `defs` must hold for the strokes drawn so far. */

@@ -1,5 +1,5 @@
 /** What every band needs to know of the drawing it stands in. */
-import type { PathStore } from '#core/craft/cloth/markup.ts';
+import type { Strokes } from '#core/craft/cloth/markup.ts';
 import { tabbyFace, wayOfRow, type Ends } from '#core/craft/interlacement/lay.ts';
 
 export interface Weave {
@@ -15,8 +15,8 @@ export interface Weave {
   readonly minPick: number;
   /** Which end of the screen the first row lies at. From the head, the piece has been turned: left is right. */
   readonly begin: 'head' | 'foot';
-  /** Picks drawn below this band, so that its first one goes on from them: over where the one before went under. */
-  readonly firstRow: number;
+  /** 1 where an odd number of picks is drawn below this band, whose first one goes on from them: over where the one before went under. */
+  readonly firstRow: 0 | 1;
   readonly endsTogether: 1 | 2;
   /** Whether yarns show their plies: only near, where `defs` holds the paints for it. */
   readonly plied: boolean;
@@ -24,7 +24,8 @@ export interface Weave {
   readonly joined: boolean;
   readonly warpColour: string;
   readonly warpWidth: number;
-  readonly paths: PathStore;
+  readonly paths: Strokes;
+  /** A band's own run of numbers, so that one that changes leaves the others as they are. */
   readonly chance: () => number;
   /** Longest pile that may hang below its band, in pixels; strips keep it inside. */
   readonly longestPile: (bandHeight: number) => number;
@@ -53,9 +54,13 @@ export function groupsShown(groups: readonly Ends[], { end, width, ends, grouped
   return shown;
 }
 
-/** Rows that can be shown in `height` pixels: all of them, or as many as have `min` pixels each; at least 2. */
+/**
+ * Rows that can be shown in `height` pixels: all of them, or as many as have `min` pixels each; at least 2. Where rows stand
+ * for several they are even in number, so that the band above begins as it did while this one grows.
+ */
 export function drawnRows(rows: number, height: number, min: number): number {
-  return Math.max(2, Math.min(Math.round(rows), Math.floor(height / min)));
+  const fitting = Math.floor(height / min);
+  return Math.max(2, Math.min(Math.round(rows), fitting < rows ? fitting - (fitting % 2) : fitting));
 }
 
 /** Which row of the cloth the screen's row `index` (from above) of `count` is. */

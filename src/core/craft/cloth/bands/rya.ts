@@ -25,7 +25,7 @@ export function ryaFall(band: RyaBand, unit: number, weave: Pick<Weave, 'pxPerMm
   return Math.min(Math.max(unit * 1.9, band.pileMm * weave.pxPerMm), weave.longestPile(unit * band.rows));
 }
 
-export const ryaGroundRows = (height: number, weave: Pick<Weave, 'minPick'>): number => drawnRows(Math.max(2, height / weave.minPick), height, weave.minPick);
+export const ryaGroundRows = (height: number, weave: Pick<Weave, 'minPick'>): number => drawnRows(Number.POSITIVE_INFINITY, height, weave.minPick);
 
 export function drawRya(band: RyaBand, height: number, weave: Weave): string {
   const rows = Math.max(1, Math.min(band.rows, Math.floor(height / (weave.minPick * 3)) || 1));
