@@ -1,4 +1,4 @@
-import { useEffect, useId, useMemo, useRef, type KeyboardEvent, type PointerEvent } from 'react';
+import { memo, useCallback, useEffect, useId, useMemo, useRef, type KeyboardEvent, type PointerEvent, type SVGProps } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
 import { placeOfBand, type ClothBox } from '#core/craft/cloth/cloth-box.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
@@ -53,13 +53,13 @@ export function DrawnBands({ made, cloth, box, pictureWidth, pictureHeight, chos
     (from, to) => { act({ do: 'move-band', band: bandAt(from), to: bandAt(to) }); },
   );
   const own = places[chosen];
-  const choose = (index: number) => {
+  const choose = useCallback((index: number) => {
     onChoose(index);
     requestAnimationFrame(() => { square.current?.focus({ preventScroll: true }); });
-  };
+  }, [onChoose]);
   return (
     <svg ref={area} className="drawn-bands" viewBox={`0 0 ${String(pictureWidth + MARGIN)} ${String(pictureHeight)}`} width={pictureWidth + MARGIN} height={pictureHeight}>
-      {places.map((place, index) => <rect key={index} className="band-hit" x={box.left} y={box.top + place.top} width={pictureWidth - 2 * box.left} height={Math.max(6, place.height)} onClick={() => { choose(index); }} />)}
+      {places.map(({ top, height }, index) => <BandHit key={index} index={index} x={box.left} y={box.top + top} width={pictureWidth - 2 * box.left} height={Math.max(6, height)} onChoose={choose} />)}
       {own !== undefined && (
         <>
           <path className="fill-weld-edge" d={`M${String(pictureWidth + 5)} ${(box.top + own.top).toFixed(1)}h7v${Math.max(5, own.height).toFixed(1)}h-7z`} />
@@ -76,6 +76,16 @@ export function DrawnBands({ made, cloth, box, pictureWidth, pictureHeight, chos
     </svg>
   );
 }
+
+interface BandHitProps extends Pick<SVGProps<SVGRectElement>, 'x' | 'y' | 'width' | 'height'> {
+  readonly index: number;
+  readonly onChoose: (index: number) => void;
+}
+
+/** Where a press chooses a band. */
+const BandHit = memo(function BandHit({ index, onChoose, ...place }: BandHitProps) {
+  return <rect className="band-hit" {...place} onClick={() => { onChoose(index); }} />;
+});
 
 function Drop({ y, from, to }: { readonly y: number; readonly from: number; readonly to: number }) {
   return <path className="drop" d={`M${String(from - 6)} ${y.toFixed(1)}H${String(to + 6)}`} />;

@@ -8,6 +8,7 @@ import type { Units } from '#core/units/units.ts';
 import { LiveCloth, useLayeredCloth } from '#islands/cloth/LiveCloth.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { DrawnBands, type DrawnMade } from './DrawnBands.tsx';
+import { useSame } from './keep-same.ts';
 import { Ruler } from './Ruler.tsx';
 
 interface PieceDrawingProps {
@@ -51,7 +52,7 @@ type StageProps = Omit<PieceDrawingProps, 'cloth' | 'made'> & { readonly cloth: 
 function Stage({ cloth, made, way, units, chosen, isOld, onChoose, onPull, onRest }: StageProps) {
   const view = useMemo((): LayeredView => ({ id: 'piece', as: way, width: WIDTH, units }), [way, units]);
   const drawn = useLayeredCloth(cloth, view);
-  const box = useMemo(() => (way === 'loom' ? loomBox(cloth, WIDTH) : hangingBox(cloth, WIDTH)), [cloth, way]);
+  const box = useSame(useMemo(() => (way === 'loom' ? loomBox(cloth, WIDTH) : hangingBox(cloth, WIDTH)), [cloth, way]));
   return (
     <div className="stage">
       <Ruler box={box} heightMm={wovenHeightMm(cloth)} pictureHeight={drawn.height} units={units} />

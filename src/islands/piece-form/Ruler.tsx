@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import type { ClothBox } from '#core/craft/cloth/cloth-box.ts';
 import { MM_PER_INCH } from '#core/units/inches.ts';
 import type { Units } from '#core/units/units.ts';
@@ -15,7 +16,7 @@ const WIDTH = 40;
 const MARKS = { cm: { mm: 10, numbers: 10, lines: 5 }, in: { mm: MM_PER_INCH, numbers: 4, lines: 1 } } as const;
 
 /** Heights beside the drawing, counted from the first row, as one measures on the loom. */
-export function Ruler({ box, heightMm, pictureHeight, units }: RulerProps) {
+export const Ruler = memo(function Ruler({ box, heightMm, pictureHeight, units }: RulerProps) {
   const { mm, numbers, lines } = MARKS[units];
   const most = Math.floor(heightMm / mm + 1e-6);
   const marks = Array.from({ length: Math.floor(most / lines) + 1 }, (_, step) => step * lines);
@@ -27,4 +28,4 @@ export function Ruler({ box, heightMm, pictureHeight, units }: RulerProps) {
       {marks.filter(far).map((mark) => <text key={mark} x={WIDTH - 14} y={(y(mark) + 4.5).toFixed(1)} textAnchor="end">{mark}</text>)}
     </svg>
   );
-}
+});

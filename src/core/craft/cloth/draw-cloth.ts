@@ -144,10 +144,15 @@ function hang(piece: WovenPiece, view: ClothView, { paths, before }: Hand): Pict
     `<g transform="translate(${num(inset)} 0)">${drawEnds(top * 0.8, top + 4, weave)}${drawFixing(piece, view.width, top, weave)}</g>`;
   const layers: readonly Layer[] = [
     { of: 'behind', x: 0, y: 0, markup: behind },
-    ...(bare ? [{ of: 'fringe', x: inset, y: at + bands.height, markup: drawWarpFringe(piece, weave) } as const] : []),
+    ...(bare ? [{ of: 'fringe', x: inset, y: at + bands.height, ...fringeOf(piece, weave, before) } as const] : []),
     ...bands.layers,
   ];
   return { width: view.width, height: at + bands.height + below + 6, layers, defs: defsOf(piece, weave, bands.clip) };
+}
+
+function fringeOf(piece: WovenPiece, weave: Weave, before: DrawnBefore): Pick<Layer, 'inputs' | 'markup'> {
+  const inputs = JSON.stringify(['fringe', piece.finish, piece.seed]) + JSON.stringify(weave);
+  return { inputs, markup: before.get(inputs) ?? drawWarpFringe(piece, weave) };
 }
 
 /** Whether pile hangs over the lower edge of the cloth, so that the ends of the warp are not seen. */

@@ -8,7 +8,7 @@ export interface Layer {
   readonly x: number;
   readonly y: number;
   readonly markup: string;
-  /** All that a band's marks follow from: what has the same inputs has the same marks. */
+  /** All that its marks follow from, where they are worth keeping: what has the same inputs has the same marks. */
   readonly inputs?: string;
 }
 

@@ -16,7 +16,9 @@ export function fine(value: number): string {
 }
 
 function short(value: number): string {
-  return String(value === 0 ? 0 : value).replace(/^(-?)0\./, '$1.');
+  const text = String(value === 0 ? 0 : value);
+  // Asked for ten thousand times in a drawing: a pattern takes twice as long.
+  return text.startsWith('0.') ? text.slice(1) : text.startsWith('-0.') ? `-${text.slice(2)}` : text;
 }
 
 /** Words of a person, made safe to stand in markup or in an attribute. */
