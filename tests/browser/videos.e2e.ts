@@ -117,6 +117,7 @@ bare.describe('a film', () => {
     await student.goto('/series/low-tide/2');
     await expect(student.getByRole('button', { name: /Go on at 0:1\d/ })).toBeVisible();
     await expect(small).toHaveAttribute('aria-pressed', 'true');
+    await expect.poll(size).toBe(480);
     await maud.close();
   });
 
