@@ -34,10 +34,13 @@ export function sectionsOf(body: string): HandbookSection[] {
 /** What is read of a stretch of MDX: captions and titles of its tags, the words of links, no marks. */
 function plainWords(source: string): string {
   return source
-    .replaceAll(/<\w+[^>]*?(?:caption|title)="([^"]*)"[^>]*>/gu, ' $1. ')
+    .replaceAll(/<\w+[^>]*?caption="([^"]*)"[^>]*>/gu, ' $1 ')
+    .replaceAll(/<\w+[^>]*?title="([^"]*)"[^>]*>/gu, ' $1. ')
     .replaceAll(/<[^>]*>/gu, ' ')
     .replaceAll(/\[([^\]]*)\]\([^)]*\)/gu, '$1')
-    .replaceAll(/^\s*(?:[-|:\s]+\||\d+\.|-)\s/gmu, ' ')
+    .replaceAll(/^\|[-|: ]+\|$/gmu, ' ')
+    .replaceAll(/^\| *(.*?) *\|$/gmu, (_, cells: string) => `${cells.replaceAll(/ *\| */gu, ', ')}.`)
+    .replaceAll(/^\s*(?:\d+\.|-)\s/gmu, ' ')
     .replaceAll(/[*_`#|]/gu, ' ')
     .replaceAll(/\s+/gu, ' ')
     .trim();

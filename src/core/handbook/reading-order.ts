@@ -47,3 +47,6 @@ export function neighboursOf<Page extends HandbookPlace>(pages: readonly Page[],
   const index = inOrder.findIndex((page) => page.id === id);
   return { before: index > 0 ? inOrder[index - 1] : undefined, after: index < 0 ? undefined : inOrder[index + 1] };
 }
+
+/** Signs of a search that are read. */
+export const LONGEST_SEARCH = 100;

@@ -116,6 +116,14 @@ describe('parts', () => {
     expect([...page.querySelectorAll('aside')].map((aside) => [aside.getAttribute('aria-label'), textOf(aside)])).toEqual([['Caution: Nails', 'NailsMind them.'], ['Tip', 'Or not.']]);
   });
 
+  test('a figure leads to its page in the handbook, drawn or not', async () => {
+    const page = await draw('<Figure of="loop-pile"/>\n\n<Figure of="tabby"/>', { figures: { tabby: { svg: '<svg></svg>' } } });
+    expect([...page.querySelectorAll('figure a')].map((link) => [textOf(link), link.getAttribute('href')])).toEqual([
+      ['Loop pile in the handbook', '/handbook/loop-pile'],
+      ['Tabby in the handbook', '/handbook/tabby'],
+    ]);
+  });
+
   test('a figure is the drawing from the scene, under it the caption as text', async () => {
     const page = await draw('<Figure of="tabby" caption="a &lt;b&gt; c"/>', { figures: { tabby: { svg: '<svg role="img" aria-label="Tabby"></svg>' } } });
     expect(page.querySelector('figure > [data-drawing] > svg')?.getAttribute('aria-label')).toBe('Tabby');

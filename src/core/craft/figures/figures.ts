@@ -37,6 +37,9 @@ export function figureOf(kind: FigureKind, input: AnyFigureInput): { readonly fi
   return { figure, input: input.piece.craft === craft ? input : exampleOf(craft, input) };
 }
 
+/** What it is called, in a few words. */
+export const figureTitle = (kind: FigureKind): string => DRAWN[kind].figure.title;
+
 /** Its movements one after another. */
 export function figureStepsOf(kind: FigureKind, given: AnyFigureInput): readonly FigureStep[] {
   const { figure, input } = figureOf(kind, given);

@@ -8,6 +8,7 @@ import { FRINGE_KNOT } from '#core/craft/figures/kinds/fringe-knot.ts';
 import { HANGING } from '#core/craft/figures/kinds/hanging.ts';
 import { HEM_STITCH } from '#core/craft/figures/kinds/hem-stitch.ts';
 import { INTERLOCK } from '#core/craft/figures/kinds/interlock.ts';
+import { JOIN_IN_ROW } from '#core/craft/figures/kinds/join-in-row.ts';
 import { LOOP_PILE } from '#core/craft/figures/kinds/loop-pile.ts';
 import { MEASURE_WRAPS } from '#core/craft/figures/kinds/measure-wraps.ts';
 import { OVERHAND_KNOT } from '#core/craft/figures/kinds/overhand-knot.ts';
@@ -20,6 +21,7 @@ import { SLIT } from '#core/craft/figures/kinds/slit.ts';
 import { SOUMAK } from '#core/craft/figures/kinds/soumak.ts';
 import { SPACER_CARD } from '#core/craft/figures/kinds/spacer-card.ts';
 import { TABBY } from '#core/craft/figures/kinds/tabby.ts';
+import { TWILL } from '#core/craft/figures/kinds/twill.ts';
 import { TWINING } from '#core/craft/figures/kinds/twining.ts';
 import { TWISTED_FRINGE } from '#core/craft/figures/kinds/twisted-fringe.ts';
 import { WARPING } from '#core/craft/figures/kinds/warping.ts';
@@ -46,7 +48,9 @@ export const FIGURES = {
   'weave-in': WEAVE_IN,
   'measure-wraps': MEASURE_WRAPS,
   'card-width': CARD_WIDTH,
+  'join-in-row': JOIN_IN_ROW,
   basket: BASKET,
+  twill: TWILL,
   'doubled-weft': DOUBLED_WEFT,
   'loop-pile': LOOP_PILE,
   twining: TWINING,

@@ -72,6 +72,18 @@ function floatsOf({ first, last }: Ends, together: number, begin: Face, way: Way
   return inWay(passes, way);
 }
 
+/** Over two ends and under two, moved on by one end to the right in every row: after four rows it begins again. */
+export function twillRow({ first, last }: Ends, row: number, way: Way = wayOfRow(row)): Lay {
+  const faceAt = (end: number): Face => ((((end - row) % 4) + 4) % 4 < 2 ? 'front' : 'back');
+  const passes: Pass[] = [];
+  for (let end = first; end <= last; end++) {
+    const before = passes.at(-1);
+    if (before?.face === faceAt(end)) passes[passes.length - 1] = { ...before, to: end };
+    else passes.push({ face: faceAt(end), from: end, to: end, way: 'right' });
+  }
+  return inWay(passes, way);
+}
+
 /** A very thick weft over some ends and under as many, puffed up where it lies in front. A last short stretch is laid flat. */
 export function rovingRow(ends: Ends, over: number, way: Way = 'right'): Lay {
   return floatsOf(ends, over, 'front', way).map((pass) => (pass.face === 'front' && endsIn(pass) === over ? { ...pass, raised: 'puff' } : pass));

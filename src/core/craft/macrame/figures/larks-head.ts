@@ -39,7 +39,7 @@ export const LARKS_HEAD: KnotFigure = {
     if (through > 0 && through < 1) handWay(scene, trail(380, 128).bend(352, 190, 372, 250).points, through);
     if (progress >= 1) handWay(scene, trail(350, 200).to(350, 300).points);
     words(scene, 500, 54, 'the rod', { anchor: 'end', quiet: true, size: 17 });
-    if (laid >= 1) words(scene, 236, bar + 4, 'the fold, in front', { anchor: 'end', size: 17 });
+    if (laid >= 1) words(scene, 236, bar + 4, 'the fold', { anchor: 'end', size: 17 });
     if (through >= 1) words(scene, 366, 290, 'both halves', { size: 17 });
   },
 };

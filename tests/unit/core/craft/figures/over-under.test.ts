@@ -9,7 +9,7 @@ import { eased, stageOf, stages } from '#core/craft/figures/kit/stages.ts';
 import { layStrand, toPath, type Run } from '#core/craft/figures/kit/strand.ts';
 import { cutAt, heading, lengthOf, trail, type Point } from '#core/craft/figures/kit/trail.ts';
 import { endX, type WarpLines } from '#core/craft/figures/kit/warp.ts';
-import { soumakRow, tabbyRow } from '#core/craft/interlacement/lay.ts';
+import { soumakRow, tabbyRow, twillRow } from '#core/craft/interlacement/lay.ts';
 import { marksOf } from '../../../../support/kept.ts';
 import { INPUT } from './figure-input.ts';
 
@@ -79,6 +79,17 @@ describe('rows after each other', () => {
 });
 
 describe('other ways through the warp', () => {
+  it('twill lies over two ends and under two, one end further to the right in each row, and begins again after four', () => {
+    const front = (row: number): number[] => twillRow({ first: 0, last: 11 }, row, 'right').flatMap(({ face, from, to }) => (face === 'front' ? Array.from({ length: to - from + 1 }, (_, end) => from + end) : []));
+    expect(front(0)).toEqual([0, 1, 4, 5, 8, 9]);
+    expect(front(1)).toEqual([1, 2, 5, 6, 9, 10]);
+    expect(front(2)).toEqual([2, 3, 6, 7, 10, 11]);
+    expect(front(3)).toEqual([0, 3, 4, 7, 8, 11]);
+    expect(front(4)).toEqual(front(0));
+    // To the left it is the same cloth, passed from the other side.
+    expect(twillRow({ first: 0, last: 11 }, 1, 'left').map(({ face, from, to }) => [face, to, from]).reverse()).toEqual(twillRow({ first: 0, last: 11 }, 1, 'right').map(({ face, from, to }) => [face, from, to]));
+  });
+
   it('soumak lies over four ends in front and comes back under two behind', () => {
     const runs = layRuns(WARP, { lay: soumakRow(ENDS, 4, 2), y: 100, lean: 6, out: 10 });
     expect(faces(runs)).toBe('FBFB');
