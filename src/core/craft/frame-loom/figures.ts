@@ -1,6 +1,8 @@
 /** The figures of weaving on a frame by name; a further one is a further line here. */
+import { BRAIDED_FRINGE } from '#core/craft/figures/kinds/braided-fringe.ts';
 import { BUTTERFLY } from '#core/craft/figures/kinds/butterfly.ts';
 import { CARD_WIDTH } from '#core/craft/figures/kinds/card-width.ts';
+import { COLUMNS } from '#core/craft/figures/kinds/columns.ts';
 import { CUTTING_OFF } from '#core/craft/figures/kinds/cutting-off.ts';
 import { DOUBLED_ENDS } from '#core/craft/figures/kinds/doubled-ends.ts';
 import { DOVETAIL } from '#core/craft/figures/kinds/dovetail.ts';
@@ -16,6 +18,7 @@ import { BASKET, DOUBLED_WEFT } from '#core/craft/figures/kinds/pairs.ts';
 import { ROVING } from '#core/craft/figures/kinds/roving.ts';
 import { RYA_KNOT } from '#core/craft/figures/kinds/rya-knot.ts';
 import { SELVEDGE } from '#core/craft/figures/kinds/selvedge.ts';
+import { SEWN_SLIT } from '#core/craft/figures/kinds/sewn-slit.ts';
 import { SHED_STICK } from '#core/craft/figures/kinds/shed-stick.ts';
 import { SLIT } from '#core/craft/figures/kinds/slit.ts';
 import { SOUMAK } from '#core/craft/figures/kinds/soumak.ts';
@@ -38,6 +41,8 @@ export const FIGURES = {
   'rya-knot': RYA_KNOT,
   wedge: WEDGE,
   slit: SLIT,
+  'sewn-slit': SEWN_SLIT,
+  columns: COLUMNS,
   soumak: SOUMAK,
   roving: ROVING,
   'shed-stick': SHED_STICK,
@@ -58,4 +63,5 @@ export const FIGURES = {
   interlock: INTERLOCK,
   'fringe-knot': FRINGE_KNOT,
   'twisted-fringe': TWISTED_FRINGE,
+  'braided-fringe': BRAIDED_FRINGE,
 } as const;
