@@ -20,7 +20,7 @@ export function CountConverter(asked: CountConverterProps) {
   const plain = isPlainNumber(way);
   return (
     <form method="get" action="#converter" className="stack stack-tight">
-      <div className="two">
+      <div className="two items-end">
         <Select name="count" form="convert" label="The label says" value={way} options={YARN_WAYS} onChange={({ target }) => ask({ way: target.value, typed })} />
         <Field
           name="of" form="convert" label="The number" value={typed} error={wrong} maxLength={40} autoComplete="off" inputMode={plain ? 'decimal' : 'text'}
@@ -42,13 +42,12 @@ function Lines({ lines }: { readonly lines: readonly AnswerLine[] }) {
     <div className="scrolls" role="region" aria-label="The same yarn in every count" tabIndex={0}>
       <table className="table dense w-full">
         <caption className="hide">The same yarn in every count</caption>
-        <thead><tr><th scope="col">count</th><th scope="col" className="num">it is</th><th scope="col">how</th></tr></thead>
+        <thead><tr><th scope="col">count, and how it is got</th><th scope="col" className="num">it is</th></tr></thead>
         <tbody>
           {lines.map(({ label, value, how }) => (
             <tr key={label}>
-              <th scope="row">{label}</th>
+              <th scope="row" className="font-normal"><span className="block">{label}</span><span className="small quiet block">{how}</span></th>
               <td className="num">{value.kind === 'words' ? value.words : <Parts parts={formatAmount(value, 'cm')} />}</td>
-              <td className="small quiet">{how}</td>
             </tr>
           ))}
         </tbody>

@@ -3,7 +3,7 @@ import userEvent from '@testing-library/user-event';
 import { expect, test } from 'vitest';
 import { CountConverter } from '#islands/handbook/CountConverter.tsx';
 
-const told = (label: string): string | undefined => screen.queryByRole('rowheader', { name: label })?.nextElementSibling?.textContent.replaceAll('\u00a0', ' ');
+const told = (label: string): string | undefined => screen.queryByText(label, { selector: 'th span' })?.closest('th')?.nextElementSibling?.textContent.replaceAll('\u00a0', ' ');
 
 test('turns a count into the others while one types, and says at the field what cannot be read', async () => {
   render(<CountConverter way="nm" typed="16/2" />);
