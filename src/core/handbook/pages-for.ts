@@ -8,7 +8,7 @@ import type { TechniqueName } from '#core/craft/piece.ts';
 /** A page of the handbook by its id, and a heading on it where it is not the whole page. */
 export interface HandbookPart {
   readonly page: string;
-  readonly heading?: string;
+  readonly heading?: string | undefined;
 }
 
 export const TECHNIQUE_PAGES: Readonly<Record<TechniqueName, string>> = {
