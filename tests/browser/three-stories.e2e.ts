@@ -4,6 +4,7 @@
  */
 import sharp from 'sharp';
 import { expect, test as base, type Browser, type Page } from 'playwright/test';
+import { weaveOnPhone } from './support/at-the-loom.ts';
 import { stateOf } from './support/demo-people.ts';
 import { textField } from './support/lesson-text.ts';
 import { letterTo } from './support/mail-tray.ts';
@@ -120,6 +121,12 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
     await page.goto(`${SERIES}/3`);
     await expect(page.getByRole('heading', { level: 1, name: 'Rya fringe' })).toBeVisible();
     await expect(page.getByText(/Part 3 opens when/)).toHaveCount(0);
+  });
+
+  await test.step('she weaves by her phone, and her loom knows the rows', async () => {
+    await weaveOnPhone(browser, page, `${SERIES}/3`);
+    await page.goto('/loom');
+    await expect(page.getByText(/row 3 of \d+ of the foot/).first()).toBeVisible();
   });
   await teacher.context().close();
 });

@@ -55,3 +55,15 @@ export function bandInHand(bands: readonly CountedBand[], counts: RowCounts): Co
   if (band === undefined) return bands[0];
   return countIn(counts, band) >= band.rows ? (bands[last + 1] ?? band) : band;
 }
+
+/**
+ * The band to count in while a part is woven: the one in hand, as far as the part weaves it.
+ * @param own keys of the bands this part weaves
+ */
+export function bandForPart(bands: readonly CountedBand[], own: readonly string[], counts: RowCounts): CountedBand | undefined {
+  const inHand = bandInHand(bands, counts);
+  const ofPart = bands.filter(({ key }) => own.includes(key));
+  const [first, last] = [ofPart[0], ofPart.at(-1)];
+  if (inHand === undefined || first === undefined || last === undefined) return inHand;
+  return inHand.index < first.index ? first : inHand.index > last.index ? last : inHand;
+}

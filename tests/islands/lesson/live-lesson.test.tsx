@@ -2,7 +2,6 @@
 import { cleanup, render, screen, waitFor } from '@testing-library/react';
 import { afterEach, beforeEach, expect, test, vi } from 'vitest';
 import { LiveLesson } from '#islands/lesson/LiveLesson.tsx';
-import { LoomSideKeys } from '#islands/lesson/LoomSideKeys.tsx';
 
 const row = (id: string, ticked: boolean): string => `
   <li id="step-${id}" class="step${ticked ? ' done' : ''}"><form class="step-form" method="post">
@@ -45,17 +44,4 @@ test('a tick the server will not have is taken back, and she is told', async () 
   screen.getByRole('button', { name: 'Done: wind' }).click();
   await screen.findByText(/was not ticked/);
   expect(screen.getByRole('button', { name: 'Done: wind', pressed: false })).toBeDefined();
-});
-
-test('arrows and space turn the steps at the loom side, but space on a key presses that key', () => {
-  const assign = vi.fn();
-  vi.stubGlobal('location', { assign });
-  render(<><LoomSideKeys back="/back" next="/next" /><a href="#x">A key</a></>);
-  const press = (key: string, target: Element = document.body) => { target.dispatchEvent(new KeyboardEvent('keydown', { key, bubbles: true, cancelable: true })); };
-  press(' ');
-  press('ArrowLeft');
-  press('ArrowRight');
-  press(' ', screen.getByText('A key'));
-  press('x');
-  expect(assign.mock.calls).toEqual([['/next'], ['/back'], ['/next']]);
 });

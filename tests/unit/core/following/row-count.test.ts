@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { planPiece } from '#core/craft/plan.ts';
 import { countedBands, countedShare, wovenByCount } from '#core/following/counted-bands.ts';
 import { fellOf, type PartInHand } from '#core/following/progress.ts';
-import { bandInHand, MOST_ROWS, newerTally, rowsOf, type CountedBand, type Tally } from '#core/following/row-count.ts';
+import { bandForPart, bandInHand, MOST_ROWS, newerTally, rowsOf, type CountedBand, type Tally } from '#core/following/row-count.ts';
 import { lowTide } from '../../../support/low-tide.ts';
 
 const band = (index: number, rows: number): CountedBand => ({ index, key: `b${String(index)}`, words: `band ${String(index)}`, technique: 'tabby', rows });
@@ -42,6 +42,16 @@ describe('the band in hand', () => {
 
   test('is none in a piece without rows', () => {
     expect(bandInHand([], {})).toBeUndefined();
+    expect(bandForPart([], ['b1'], {})).toBeUndefined();
+  });
+
+  test.each<[string, readonly string[], Record<string, number>, number]>([
+    ['is the part’s first where nothing below it was counted', ['b2', 'b4'], {}, 2],
+    ['is the part’s last once she is beyond it', ['b1', 'b2'], { b4: 3 }, 2],
+    ['is the one in hand within the part', ['b1', 'b2'], { b1: 10 }, 2],
+    ['is the one in hand in a part that weaves none', [], { b1: 10 }, 2],
+  ])('while a part is woven %s', (_, own, counts, index) => {
+    expect(bandForPart(bands, own, counts)?.index).toBe(index);
   });
 });
 
