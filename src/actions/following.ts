@@ -2,6 +2,7 @@ import { CalendarForm, FinishForm, GatheredForm, ReadForm } from '#contracts/fol
 import { MyPieceForm } from '#contracts/my-piece.ts';
 import { RowsForm } from '#contracts/rows.ts';
 import { TickInput } from '#contracts/ticks.ts';
+import { ChangeTimeForm, WriteTimeForm } from '#contracts/weaving-time.ts';
 import { stepAnchor } from '#core/lesson-text/tree.ts';
 import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { sayRows } from '#server/use-cases/progress/count-rows.ts';
@@ -9,6 +10,7 @@ import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
 import { readAnew } from '#server/use-cases/progress/note-reading.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
+import { changeTime, writeDownTime } from '#server/use-cases/progress/write-down-time.ts';
 import { renewCalendar } from '#server/use-cases/timetable/renew-calendar.ts';
 import { formAction } from './form-action.ts';
 
@@ -27,6 +29,16 @@ export const following = {
   rows: formAction(RowsForm, async (input, ctx) => {
     await sayRows(ctx, input);
     return { to: `/series/${input.series}/${input.part}/loomside?step=${input.step}#rows` };
+  }),
+
+  writeTime: formAction(WriteTimeForm, async (input, ctx) => {
+    await writeDownTime(ctx, input);
+    return { to: '/loom#time', said: 'Your time is written down.' };
+  }),
+
+  changeTime: formAction(ChangeTimeForm, async (input, ctx) => {
+    const { isTakenOut } = await changeTime(ctx, input);
+    return { to: '/loom#time', said: isTakenOut ? 'That time is taken out.' : 'That time is changed.' };
   }),
 
   finish: formAction(FinishForm, async (input, ctx) => {

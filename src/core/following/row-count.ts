@@ -67,3 +67,11 @@ export function bandForPart(bands: readonly CountedBand[], own: readonly string[
   if (inHand === undefined || first === undefined || last === undefined) return inHand;
   return inHand.index < first.index ? first : inHand.index > last.index ? last : inHand;
 }
+
+/** `row 3 of 11 of the band “foot”`, of the band in hand; empty where no row of it is counted. */
+export function rowPlaceWords(bands: readonly CountedBand[], counts: RowCounts): string {
+  const band = bandInHand(bands, counts);
+  const rows = band === undefined ? 0 : countIn(counts, band);
+  if (band === undefined || rows === 0) return '';
+  return `row ${String(rows)} of ${String(band.rows)} of ${band.key.startsWith('#') ? band.words : `the band “${band.words}”`}`;
+}

@@ -42,6 +42,7 @@ export { Tick } from './tick.ts';
 export { User } from './user.ts';
 export { VideoPlace } from './video-place.ts';
 export { VideoUpload } from './video-upload.ts';
+export { WeavingTime } from './weaving-time.ts';
 export { WordReport } from './word-report.ts';
 export { Workroom } from './workroom.ts';
 export { WorkroomHelper } from './workroom-helper.ts';

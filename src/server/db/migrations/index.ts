@@ -20,9 +20,10 @@ import { createQuestions } from './0018-create-questions.ts';
 import { createHelperInvitations } from './0019-create-helper-invitations.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 import { createLessonReads } from './0021-create-lesson-reads.ts';
-import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
+import { createWeavingTimes } from './0027-create-weaving-times.ts';
 import { createPhotoUploads } from './0028-create-photo-uploads.ts';
+import { createOwnLooms } from './0032-create-own-looms.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -46,6 +47,7 @@ export const migrations: readonly Migration[] = [
   createKeptThings,
   createLessonReads,
   createRowTallies,
-  createOwnLooms,
+  createWeavingTimes,
   createPhotoUploads,
+  createOwnLooms,
 ];

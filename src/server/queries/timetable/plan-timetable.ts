@@ -1,5 +1,5 @@
 /** The timetable of a whole series as a student would meet it who starts on a given day. For its teacher. */
-import { DateTime } from 'luxon';
+import { dayIn } from '#core/timetable/day-in.ts';
 import { openingDays, type OpeningDay } from '#core/timetable/opening-days.ts';
 import { outOfOrder, type OutOfOrder } from '#core/timetable/out-of-order.ts';
 import { instantOfWall } from '#core/timetable/opening.ts';
@@ -32,7 +32,7 @@ export async function planTimetable(actor: Actor, slug: string, asked: string | 
     Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null }, order: ['position', 'id'], attributes: ['publicId', 'title', 'opens', 'isPreview', 'checkpoint'] }),
   ]);
   const { timeZone, answerDays } = workroom;
-  const today = DateTime.fromJSDate(now, { zone: timeZone }).toISODate() ?? now.toISOString().slice(0, 10);
+  const today = dayIn(now, timeZone);
   const wished = asked === null ? null : instantOfWall(`${asked}T09:00`, timeZone);
   const start = asked !== null && wished !== null ? { date: asked, at: wished } : { date: today, at: instantOfWall(`${today}T09:00`, timeZone) ?? now };
   const parts = lessons.map(({ publicId, title, opens, isPreview, checkpoint }, index) => ({ publicId, number: index + 1, title, opens, isPreview, asksForPhoto: checkpoint !== null }));

@@ -3,7 +3,7 @@ import { describe, expect, test } from 'vitest';
 import { planPiece } from '#core/craft/plan.ts';
 import { countedBands, countedShare, wovenByCount } from '#core/following/counted-bands.ts';
 import { fellOf, type PartInHand } from '#core/following/progress.ts';
-import { bandForPart, bandInHand, MOST_ROWS, newerTally, rowsOf, type CountedBand, type Tally } from '#core/following/row-count.ts';
+import { bandForPart, bandInHand, MOST_ROWS, newerTally, rowPlaceWords, rowsOf, type CountedBand, type Tally } from '#core/following/row-count.ts';
 import { lowTide } from '../../../support/low-tide.ts';
 
 const band = (index: number, rows: number): CountedBand => ({ index, key: `b${String(index)}`, words: `band ${String(index)}`, technique: 'tabby', rows });
@@ -43,6 +43,13 @@ describe('the band in hand', () => {
   test('is none in a piece without rows', () => {
     expect(bandInHand([], {})).toBeUndefined();
     expect(bandForPart([], ['b1'], {})).toBeUndefined();
+  });
+
+  test('is told with its row', () => {
+    expect(rowPlaceWords(bands, { b1: 3 })).toBe('row 3 of 10 of the band “band 1”');
+    expect(rowPlaceWords([{ ...band(0, 4), key: '#0', words: 'the first band' }], { '#0': 4 })).toBe('row 4 of 4 of the first band');
+    expect(rowPlaceWords(bands, { b1: 10 })).toBe('');
+    expect(rowPlaceWords([], {})).toBe('');
   });
 
   test.each<[string, readonly string[], Record<string, number>, number]>([
