@@ -126,7 +126,7 @@ test('from a published part to a woven-on loom', async ({ page, browser, request
   await test.step('she weaves by her phone, and her loom knows the rows', async () => {
     await weaveOnPhone(browser, page, `${SERIES}/3`);
     await page.goto('/loom');
-    await expect(page.getByText(/row 3 of \d+ of the foot/).first()).toBeVisible();
+    await expect(page.getByText(/row 3 of \d+ of the band “foot”/).first()).toBeVisible();
   });
   await teacher.context().close();
 });

@@ -29,6 +29,15 @@ export function wovenByCount(bands: readonly CountedBand[], counts: RowCounts): 
   return rows >= band.rows ? { bandsDone: band.index + 1 } : { bandsDone: band.index, rows };
 }
 
+/** The counts that say the same as `said`, for the bands from which her place is told. */
+export function countsAt(bands: readonly CountedBand[], { bandsDone, rows = 0 }: WovenSoFar): RowCounts {
+  const below = bands.findLast(({ index }) => index < bandsDone);
+  return Object.fromEntries([
+    ...(below === undefined ? [] : [[below.key, below.rows] as const]),
+    ...bands.filter(({ index }) => index >= bandsDone).map(({ key, index }) => [key, index === bandsDone ? rows : 0] as const),
+  ]);
+}
+
 /**
  * Share of the woven height, 0 to 1, that she counted, or said in *My piece* to have woven: the further of both.
  * 0 for a craft that has no rows.

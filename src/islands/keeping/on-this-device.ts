@@ -1,5 +1,6 @@
 /** Beside every page of a signed-in person: the service worker that keeps pages, and the sending of what waits. */
 import type { ToWorker } from '#contracts/kept-pages.ts';
+import { forgetRows } from './rows-here.ts';
 import { isWaiting, outboxOf, personOfPage, type Outbox } from './outbox.ts';
 
 /** So long leaving waits for what is still to be sent. */
@@ -40,5 +41,6 @@ async function leave(form: HTMLFormElement, outbox: Outbox): Promise<void> {
   const words = count === 1 ? 'One thing is kept on this device only and would be lost.' : `${count} things are kept on this device only and would be lost.`;
   if (count > 0 && !window.confirm(`${words} Sign out all the same?`)) return;
   await outbox.empty();
+  forgetRows();
   form.submit();
 }

@@ -1,7 +1,7 @@
 import { useCallback, useEffect, useState } from 'react';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { hasOwnKeys, pressesByItself } from './own-keys.ts';
-import { showStep, stepShown, wordsOfStep } from './side-steps.ts';
+import { showStep, stepAsked, stepShown, wordsOfStep } from './side-steps.ts';
 import { useScreenAwake, type Awake } from './use-screen-awake.ts';
 import { useSwipe } from './use-swipe.ts';
 import { canSpeak, hush, say, switchVoice } from './voice.ts';
@@ -29,6 +29,9 @@ export function LoomSide() {
   }, []);
   useEffect(() => {
     setLive(true);
+    // Without a connection the page may be one that was kept at another step.
+    const asked = stepAsked();
+    if (asked !== undefined && asked !== stepShown()) showStep(asked);
     // What is out of sight is silent; leaving ends it.
     const quiet = (): void => { if (document.visibilityState === 'hidden') hush(); };
     document.addEventListener('visibilitychange', quiet);

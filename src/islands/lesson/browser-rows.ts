@@ -1,6 +1,8 @@
 // The rows of this browser, one store for each seat.
 import type { RowsCounted } from '#contracts/rows.ts';
 import type { RowCounts } from '#core/following/row-count.ts';
+import { ROWS_HERE } from '#islands/keeping/rows-here.ts';
+import { outboxOf, personOfPage } from '#islands/keeping/outbox.ts';
 import { RowStore, type RowStorage, type SendRows } from './row-store.ts';
 
 const stores = new Map<string, RowStore>();
@@ -9,8 +11,8 @@ const stores = new Map<string, RowStore>();
 export function rowStore(seat: string, series: string, counts: RowCounts): RowStore {
   const known = stores.get(seat);
   if (known !== undefined) return known;
-  const name = `fellmark-rows-${seat}`;
-  const store = new RowStore(storageOf(name), sendTo(series), newDevice, counts);
+  const name = `${ROWS_HERE}${seat}`;
+  const store = new RowStore(storageOf(name), sendTo(seat, series), newDevice, counts);
   stores.set(seat, store);
   window.addEventListener('online', () => { void store.flush(); });
   window.addEventListener('storage', ({ key }) => { if (key === name) store.look(); });
@@ -22,13 +24,18 @@ function newDevice(): string {
   return [...crypto.getRandomValues(new Uint8Array(12))].map((byte) => byte.toString(16).padStart(2, '0')).join('');
 }
 
-const sendTo = (series: string): SendRows => async (device, tallies) => {
+const sendTo = (seat: string, series: string): SendRows => async (device, tallies) => {
+  const address = '/api/rows';
+  const rows = { series, device, tallies };
   try {
-    const response = await fetch('/api/rows', { method: 'POST', headers: { 'Content-Type': 'application/json' }, body: JSON.stringify({ series, device, tallies }), keepalive: true });
+    const response = await fetch(address, { method: 'POST', headers: { 'Content-Type': 'application/json' }, body: JSON.stringify(rows), keepalive: true });
     if (response.ok) return { kind: 'taken', rows: (await response.json()) as RowsCounted };
     if (response.status === 401) return { kind: 'signed-out' };
     return { kind: response.status === 408 || response.status === 429 || response.status >= 500 ? 'later' : 'refused' };
   } catch {
+    // Whichever page she opens next sends them, if this one does not come to it. Twice does no harm.
+    const person = personOfPage();
+    if (person !== null) void outboxOf(person).put({ kind: 'rows', name: seat, address, body: { json: rows } });
     return { kind: 'later' };
   }
 };

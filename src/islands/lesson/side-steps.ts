@@ -11,6 +11,12 @@ export function stepShown(): number {
   return Number(all().find(({ hidden }) => !hidden)?.dataset['step'] ?? 1);
 }
 
+/** The step the address asks for, where a kept page stands in for it; undefined where it asks for none. */
+export function stepAsked(): number | undefined {
+  const asked = Number(new URLSearchParams(window.location.search).get('step'));
+  return Number.isInteger(asked) && asked > 0 ? asked : undefined;
+}
+
 /** Shows a step with its figure and its keys; the address follows, so that a reload stays here. False where there is no such step. */
 export function showStep(number: number): boolean {
   const parts = all();

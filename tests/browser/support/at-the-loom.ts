@@ -16,9 +16,9 @@ const counted = (phone: Page, rows: number) => expect(phone.locator('.rows-numbe
 
 /** `page` is signed in as somebody to whom the part is open. Its bands are counted for the first time. */
 export async function weaveOnPhone(browser: Browser, page: Page, part: string): Promise<void> {
-  const context = await browser.newContext({ storageState: await page.context().storageState(), baseURL: process.env['FELLMARK_TEST_URL'] ?? '', viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true, locale: 'en-GB' });
+  const context = await browser.newContext({ storageState: await page.context().storageState(), baseURL: process.env['FELLMARK_TEST_URL'] ?? '', viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true, serviceWorkers: 'allow', locale: 'en-GB' });
   const phone = await context.newPage();
-  await phone.goto(`${part}/loomside?step=1`);
+  await phone.goto(`${part}/loomside`);
   const count = phone.getByRole('button', { name: 'Count rows' });
   await expect(count).toBeVisible();
   await swipe(phone, 320, 120);
@@ -38,16 +38,17 @@ export async function weaveOnPhone(browser: Browser, page: Page, part: string): 
   await step(phone, 2);
   await expectFaultless(phone);
 
+  await expect.poll(() => phone.evaluate(async (address) => (await caches.match(address)) !== undefined, `${part}/loomside`)).toBe(true);
   await context.setOffline(true);
   await phone.keyboard.press('Space');
   await counted(phone, 3);
   await expect(phone.getByText('Kept on this device. It goes out when there is signal.')).toBeVisible();
   await swipe(phone, 320, 120);
   await step(phone, 3);
-  await context.setOffline(false);
-  await expect(phone.getByText('Kept on this device.')).toBeHidden();
   await phone.reload();
   await step(phone, 3);
   await counted(phone, 3);
+  await context.setOffline(false);
+  await expect(phone.getByText('Kept on this device.')).toBeHidden();
   await context.close();
 }

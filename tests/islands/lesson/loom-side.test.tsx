@@ -52,6 +52,12 @@ describe('the loom side', () => {
     expect(shown()).toBe('Do thing 2');
   });
 
+  test('shows the step its address asks for, where it is a page kept at another one', () => {
+    window.history.replaceState(null, '', '/series/low-tide/3/loomside?step=3');
+    render(<LoomSide />);
+    expect(shown()).toBe('Do thing 3');
+  });
+
   test('space on the key with the focus goes where that key goes; on a button it is the button’s', () => {
     render(<LoomSide />);
     press(' ');

@@ -21,7 +21,7 @@ describe('what a device may keep', () => {
     const at = `/series/${slug}`;
     expect(await toKeep(student)).toEqual({ person: student.publicId, pages: ['/loom'], series: [{ slug, pages: [
       `${at}/gather`, `${at}/gather?part=1`, `${at}/gather?part=2`, `${at}/gather?part=3`,
-      `${at}/1`, `${at}/1/loomside?step=1`, `${at}/1/loomside?step=2`, `${at}/2`, `${at}/2/loomside?step=1`, `${at}/2/loomside?step=2`,
+      `${at}/1`, `${at}/1/loomside`, `${at}/2`, `${at}/2/loomside`,
     ] }] });
   });
 

@@ -3,8 +3,10 @@ import { MyPieceForm } from '#contracts/my-piece.ts';
 import { CRAFTS } from '#core/craft/crafts.ts';
 import { madeFor } from '#core/craft/made-for.ts';
 import { MyPieceRow, PatternPiece, User } from '#server/models/index.ts';
+import { rowCounts } from '#server/queries/following/row-counts.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
+import { sayRows } from '#server/use-cases/progress/count-rows.ts';
 import { contextFor, contextOf } from '../../support/context.ts';
 import { buildUser } from '../../support/factories.ts';
 import { buildFollowed } from '../../support/followed.ts';
@@ -62,6 +64,19 @@ describe('a student’s own piece', () => {
     const woven = { 'woven.bandsDone': '6', 'woven.rows': '30', 'woven.heightMm': '13,5', 'woven.left.water': '60' };
     expect(await saveMyPiece(ctx, form(series.slug, { ...FITS, ...woven, revision: '1' }))).toEqual({ revision: 2, isBegun: true });
     expect(await MyPieceRow.findByPk(seat.id)).toMatchObject({ woven: { bandsDone: 6, rows: 30, heightMm: 135, leftG: { water: 60 } } });
+  });
+
+  test('half way is where the row counter goes on from, until she counts on; what is saved besides leaves the rows as they are', async () => {
+    const { series, student, seat } = await buildFollowed();
+    const ctx = await contextFor(student);
+    const at = { 'woven.bandsDone': '6', 'woven.rows': '30' };
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, ...at }));
+    expect(await rowCounts(seat.id)).toMatchObject({ dunes: 30 });
+    await sayRows(ctx, { series: series.slug, part: 1, step: 1, band: 'dunes', rows: 34 });
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, ...at, revision: '1', 'yarns.ridge.by': 'tex', 'yarns.ridge.grist': '330' }));
+    expect(await rowCounts(seat.id)).toMatchObject({ dunes: 34 });
+    await saveMyPiece(ctx, form(series.slug, { ...FITS, 'woven.bandsDone': '0', revision: '2' }));
+    expect(Object.values(await rowCounts(seat.id)).every((rows) => rows === 0)).toBe(true);
   });
 
   test('half way is refused what can no longer change, at the field, and keeps what was kept', async () => {

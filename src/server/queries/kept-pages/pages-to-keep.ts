@@ -26,7 +26,8 @@ function pagesOf({ series, progress }: FollowedSeries): string[] {
   const open = series.parts.filter(({ access, publishedVersionId }) => access.may === 'follow' && publishedVersionId !== null);
   const lists = [`${address}/gather`, ...series.parts.map(({ number }) => `${address}/gather?part=${number}`)];
   return [...lists, ...open.flatMap(({ number }) => {
-    const steps = progress.find((part) => part.number === number)?.steps ?? [];
-    return [`${address}/${number}`, ...steps.map((_step, index) => `${address}/${number}/loomside?step=${index + 1}`)];
+    const hasSteps = (progress.find((part) => part.number === number)?.steps ?? []).length > 0;
+    // One page holds every step.
+    return [`${address}/${number}`, ...(hasSteps ? [`${address}/${number}/loomside`] : [])];
   })];
 }

@@ -1,12 +1,13 @@
 import type { MyPieceInput } from '#contracts/my-piece.ts';
-import type { Piece } from '#core/craft/crafts.ts';
+import type { Piece, Plan } from '#core/craft/crafts.ts';
 import { cordsOfFields, judgeCords, typeCords } from '#core/craft/macrame/my-piece.ts';
 import { judgeMine, type MineFound } from '#core/craft/my-piece/judge-mine.ts';
 import { INSIDE_WIDTH } from '#core/craft/my-piece/asked-of-mine.ts';
 import { LOOM_NAME, loomOfMine, MISSING_WIDTH, readLoomName, type OwnLoom } from '#core/craft/my-piece/own-loom.ts';
 import { asPattern, mineOfFields } from '#core/craft/my-piece/typed-mine.ts';
 import type { MyPiece } from '#core/craft/fit.ts';
-import { isBegun, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
+import { countedBands, countsAt } from '#core/following/counted-bands.ts';
+import { isBegun, NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
 import type { Units } from '#core/units/units.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
@@ -15,6 +16,7 @@ import { Enrolment, MyPieceRow, User } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 import { writeLoom } from '#server/use-cases/looms/_write-loom.ts';
+import { setRows } from '#server/use-cases/progress/_write-rows.ts';
 
 const CHANGED = { says: 'Your piece was changed in another window or on another device meanwhile. What you typed still stands here. Keep it once more to have it so, or load the page again to see the other.' };
 
@@ -44,6 +46,11 @@ export async function saveMyPiece(ctx: Context, input: MyPieceInput): Promise<{ 
     if (kept === null) await MyPieceRow.create({ enrolmentId: seat.enrolmentId, data: judged.mine, woven, revision });
     else await kept.update({ data: judged.mine, woven, revision });
     if (named !== null) await writeLoom(userId, named);
+    // What she says of how far she is holds for the row counter, too; saying nothing new leaves it as she counted.
+    const said = woven ?? NOTHING_WOVEN;
+    if (judged.made !== undefined && placeOf(said) !== placeOf(before.woven)) {
+      for (const [band, rows] of Object.entries(countsAt(countedBands(judged.made), said))) await setRows(seat.enrolmentId, band, rows, ctx.clock.now());
+    }
     await User.update({ units }, { where: { id: userId } });
     return { revision, isBegun: woven !== null && isBegun(woven) };
   });
@@ -60,9 +67,11 @@ function loomToKeep(input: MyPieceInput, pattern: Piece, mine: MyPiece): { reado
   return { name, loom };
 }
 
+const placeOf = ({ bandsDone, rows = 0 }: WovenSoFar): string => `${String(bandsDone)} ${String(rows)}`;
+
 interface Judged {
   readonly units: Units;
-  readonly judged: { readonly ok: true; readonly mine: MyPiece; readonly halfway?: { readonly woven: WovenSoFar } | null | undefined } | { readonly ok: false; readonly problems: readonly MineFound[] };
+  readonly judged: { readonly ok: true; readonly mine: MyPiece; readonly halfway?: { readonly woven: WovenSoFar } | null | undefined; readonly made?: { readonly piece: Piece; readonly plan: Plan } } | { readonly ok: false; readonly problems: readonly MineFound[] };
 }
 
 /** What she sent, read as her pattern's craft asks it. */
@@ -75,7 +84,8 @@ function judge(input: MyPieceInput, pattern: Piece, before: { readonly mine: MyP
   }
   if (pattern.craft !== 'frame-loom') throw new AppError('CONFLICT', { says: 'This piece is made as its pattern has it, so it asks nothing of yours.' });
   const sent = mineOfFields(ask, pattern);
-  return { units: sent.units, judged: judgeMine(input.asPattern === undefined ? sent : asPattern(sent, pattern), pattern, before) };
+  const judged = judgeMine(input.asPattern === undefined ? sent : asPattern(sent, pattern), pattern, before);
+  return { units: sent.units, judged: judged.ok ? { ...judged, made: judged.fitted } : judged };
 }
 
 function textOf(fields: Readonly<Record<string, unknown>>, name: string): string | undefined {

@@ -1,7 +1,7 @@
 import fc from 'fast-check';
 import { describe, expect, test } from 'vitest';
 import { planPiece } from '#core/craft/plan.ts';
-import { countedBands, countedShare, wovenByCount } from '#core/following/counted-bands.ts';
+import { countedBands, countedShare, countsAt, wovenByCount } from '#core/following/counted-bands.ts';
 import { fellOf, type PartInHand } from '#core/following/progress.ts';
 import { bandForPart, bandInHand, MOST_ROWS, newerTally, rowPlaceWords, rowsOf, type CountedBand, type Tally } from '#core/following/row-count.ts';
 import { lowTide } from '../../../support/low-tide.ts';
@@ -82,6 +82,12 @@ describe('the fell of Low Tide', () => {
     expect(shares).toEqual([...shares].sort((a, b) => a - b));
     expect(new Set(shares).size).toBe(foot + 1);
     expect(shares.at(-1)).toBeCloseTo(12 / 440, 2);
+  });
+
+  test.each([{ bandsDone: 0 }, { bandsDone: 5, rows: 3 }, { bandsDone: 6 }, { bandsDone: 8, rows: 1 }, { bandsDone: 13 }])('stands in the counts as it was said: %j', async (said) => {
+    const counted = countedBands(await made());
+    const before = Object.fromEntries(counted.map(({ key }) => [key, 2]));
+    expect(wovenByCount(counted, { ...before, ...countsAt(counted, said) })).toEqual(said);
   });
 
   test('is where she said in My piece when that is further than what she counted', async () => {
