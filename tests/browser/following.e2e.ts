@@ -143,12 +143,15 @@ test.describe('without script', () => {
 
     const words = page.getByLabel(/^What should Ilse know/);
     await words.fill('Is it slack?');
-    await page.getByLabel('Photo', { exact: true }).setInputFiles({ name: 'loom.jpg', mimeType: 'image/jpeg', buffer: Buffer.from('no photo at all') });
+    await page.getByLabel('Photos', { exact: true }).setInputFiles({ name: 'loom.jpg', mimeType: 'image/jpeg', buffer: Buffer.from('no photo at all') });
     await page.getByRole('button', { name: 'Send to Ilse' }).click();
     await expect(page).toHaveURL(/\/series\/low-tide\/2#checkpoint$/);
     await expect(page.getByText('This file is not a photo we can read. Use JPEG, PNG or WebP, up to 25 MB.')).toBeVisible();
     await expect(words).toHaveValue('Is it slack?');
-    await page.getByLabel('Photo', { exact: true }).setInputFiles({ name: 'loom.jpg', mimeType: 'image/jpeg', buffer: await jpeg() });
+    await page.getByLabel('Photos', { exact: true }).setInputFiles({ name: 'loom.jpg', mimeType: 'image/jpeg', buffer: Buffer.alloc(45_000_000) });
+    await page.getByRole('button', { name: 'Send to Ilse' }).click();
+    await expect(page.getByText('This photo is larger than 25 MB.')).toBeVisible({ timeout: 30_000 });
+    await page.getByLabel('Photos', { exact: true }).setInputFiles({ name: 'loom.jpg', mimeType: 'image/jpeg', buffer: await jpeg() });
     await page.getByRole('button', { name: 'Send to Ilse' }).click();
     await expect(page.getByRole('heading', { name: 'Ilse has your photo' })).toBeVisible();
 

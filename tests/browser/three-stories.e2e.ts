@@ -29,7 +29,8 @@ async function takeSeat(page: Page, buyer: NewPerson): Promise<void> {
 }
 
 async function showPhoto(page: Page, words: string): Promise<void> {
-  const buffer = await sharp({ create: { width: 1_200, height: 900, channels: 3, background: '#b9aa8d' } }).jpeg().toBuffer();
+  // Another picture each time: the same file again would be the same photo.
+  const buffer = await sharp({ create: { width: 1_200, height: 900, channels: 3, background: { r: 185, g: 170, b: (words.length * 8) % 256 } } }).jpeg().toBuffer();
   await page.goto(`${SERIES}/2`);
   await page.locator('#checkpoint').scrollIntoViewIfNeeded();
   await page.getByLabel('What should Ilse know?').fill(words);

@@ -15,8 +15,8 @@ export interface Shot {
 }
 
 export interface Showing {
-  /** `waiting`: the line dropped, it goes on by itself. */
-  readonly at: 'choosing' | 'sending' | 'waiting' | 'shown';
+  /** `waiting`: the line dropped, it goes on by itself. `kept`: it waits on this device, the page may be closed. */
+  readonly at: 'choosing' | 'sending' | 'waiting' | 'kept' | 'shown';
   readonly shots: readonly Shot[];
   /** Tries since the line dropped. */
   readonly tries: number;
@@ -28,7 +28,7 @@ export type ShowingEvent =
   /** Cut or turned: another file in its place, of which nothing has been sent. */
   | { readonly kind: 'replace'; readonly key: number; readonly file: File }
   | { readonly kind: 'put-away'; readonly key: number }
-  | { readonly kind: 'send' | 'dropped' | 'stop' | 'shown' }
+  | { readonly kind: 'send' | 'dropped' | 'stop' | 'kept' | 'shown' }
   | { readonly kind: 'begun'; readonly key: number; readonly shot: string }
   | { readonly kind: 'progress'; readonly key: number; readonly sent: number }
   | { readonly kind: 'there'; readonly key: number; readonly shot: string }
@@ -77,6 +77,8 @@ export function showingAfter(state: Showing, event: ShowingEvent): Showing {
       const bad = state.shots.find(({ key }) => key === event.key);
       return { at: 'choosing', tries: 0, shots: state.shots.filter((shot) => shot !== bad), fault: faultOf(bad?.file.name ?? '', event.says, bad === undefined || state.shots.length === 1) };
     }
+    case 'kept':
+      return { ...state, at: 'kept', shots: [], tries: 0 };
     case 'shown':
       return { ...state, at: 'shown', tries: 0 };
   }

@@ -1,6 +1,7 @@
 import { useCallback, useEffect, useReducer, useRef } from 'react';
 import { useTryingAgain } from '#islands/uploading/use-trying-again.ts';
 import { emptyShowing, showingAfter, type Shot, type Showing } from './showing.ts';
+import type { KeepPhotos } from './kept-photos.ts';
 import type { PhotoTarget, Show, StartUpload } from './uploader.ts';
 
 export interface ShowingInHand {
@@ -20,11 +21,15 @@ interface OnItsWay {
 /** What is said when the code that carries photos cannot be fetched. */
 const NOT_FROM_HERE = 'The photo could not be sent from here. Load the page again and send it once more.';
 
-/** Photos chosen, sent one after the other, then shown together. A line that drops holds them up, nothing more. */
-export function useShowing({ series, lesson }: PhotoTarget, start: StartUpload, show: Show, fault: string | undefined): ShowingInHand {
+/**
+ * Photos chosen, sent one after the other, then shown together. A line that drops holds them up, nothing more; without any
+ * connection they are kept on the device, which sends them from whatever page is open then.
+ */
+export function useShowing({ series, lesson }: PhotoTarget, start: StartUpload, show: Show, kept: KeepPhotos, fault: string | undefined): ShowingInHand {
   const [state, tell] = useReducer(showingAfter, fault, emptyShowing);
   const now = useRef(state);
   useEffect(() => { now.current = state; });
+  const said = useRef('');
   const onItsWay = useRef<OnItsWay | null>(null);
   /** Counts sendings, so that what an earlier one still says is not heard. */
   const round = useRef(0);
@@ -62,8 +67,16 @@ export function useShowing({ series, lesson }: PhotoTarget, start: StartUpload, 
     void ask();
   }, [show, series, lesson]);
 
+  const isCutOff = state.at === 'waiting' && state.tries > 0;
+  useEffect(() => {
+    if (!isCutOff || navigator.onLine) return;
+    const { shots } = now.current;
+    void kept.put({ series, lesson }, said.current, shots.map(({ file }) => file)).then((isKept) => { if (isKept) { end(); tell({ kind: 'kept' }); } }, () => undefined);
+  }, [isCutOff, kept, series, lesson, end]);
+
   const send = useCallback((words: string) => {
     end();
+    said.current = words;
     const mine = round.current;
     tell({ kind: 'send' });
     const goThrough = async (): Promise<void> => {

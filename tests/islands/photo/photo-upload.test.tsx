@@ -3,13 +3,14 @@ import { act, cleanup, fireEvent, render, screen, waitFor } from '@testing-libra
 import userEvent from '@testing-library/user-event';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { PhotoUpload } from '#islands/photo/PhotoUpload.tsx';
+import type { KeepPhotos } from '#islands/photo/kept-photos.ts';
 import type { PhotoTarget, Show, ShowAnswer, StartUpload } from '#islands/photo/uploader.ts';
 import type { CarryEvents } from '#islands/uploading/carry.ts';
 
 beforeEach(() => {
   vi.stubGlobal('URL', Object.assign(URL, { createObjectURL: () => 'blob:here', revokeObjectURL: () => undefined }));
 });
-afterEach(() => { cleanup(); vi.useRealTimers(); });
+afterEach(() => { cleanup(); vi.useRealTimers(); vi.restoreAllMocks(); });
 
 function drawn(given: Partial<Parameters<typeof PhotoUpload>[0]> = {}, answers: ShowAnswer[] = []) {
   const heard: { events?: CarryEvents; target?: PhotoTarget & { readonly goesOn: string | null }; sent: string[] } = { sent: [] };
@@ -65,6 +66,24 @@ describe('sending a photo', () => {
     expect(screen.getByRole('status').textContent).toContain('Waits for signal');
     await act(async () => { window.dispatchEvent(new Event('online')); await Promise.resolve(); });
     expect(show).toHaveBeenLastCalledWith({ series: 'low-tide', lesson: 'l', words: '', shots: ['a', 'b'] });
+    expect(onSent).toHaveBeenCalledTimes(1);
+  });
+
+  test('without any connection is kept on the device with its words, and the thread is shown once it was sent from there', async () => {
+    let waiting = 0;
+    let hear = (): void => undefined;
+    const put = vi.fn<KeepPhotos['put']>(() => { waiting = 1; hear(); return Promise.resolve(true); });
+    const kept: KeepPhotos = { put, current: () => ({ waiting, refused: undefined }), subscribe: (heard) => { hear = heard; return () => undefined; } };
+    vi.spyOn(navigator, 'onLine', 'get').mockReturnValue(false);
+    const { heard, upload, onSent } = drawn({ kept });
+    await userEvent.type(screen.getByRole('textbox', { name: /What should Ilse know/ }), 'Is it slack?');
+    choose(photo());
+    await userEvent.click(screen.getByRole('button', { name: 'Send to Ilse' }));
+    await act(async () => { heard.events?.dropped(); await Promise.resolve(); });
+    expect(put).toHaveBeenCalledWith({ series: 'low-tide', lesson: 'l' }, 'Is it slack?', [expect.objectContaining({ name: 'loom.jpg' })]);
+    expect(upload.leave).toHaveBeenCalled();
+    expect(screen.getByRole('status').textContent).toContain('Kept on this device');
+    act(() => { waiting = 0; hear(); });
     expect(onSent).toHaveBeenCalledTimes(1);
   });
 
