@@ -1,5 +1,6 @@
 /** What a teacher or helper says of a photo, and the phrases and the promise of her workroom. */
 import { z } from 'astro/zod';
+import { isSeeToMend } from '#core/following/see-to-mend.ts';
 import { PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { LONGEST_PHRASE, MOST_PHRASES, phrasesOf } from '#core/workroom/bench.ts';
 
@@ -30,6 +31,8 @@ export const VerdictForm = z.object({
   verdict: z.enum(['weave-on', 'mend-first'], { errorMap: () => ({ message: 'Choose weave on or mend first.' }) }),
   words: z.string().trim().max(2_000, 'At most 2,000 characters work here.').default(''),
   notes: Notes.default('[]'),
+  /** With *mend first*: where it says how. */
+  see: z.string().refine(isSeeToMend).nullish().catch(null),
   /** The photo that is taken in hand then; without it the oldest. */
   next: photo.optional().catch(undefined),
 }).superRefine(({ verdict, words, notes }, context) => {

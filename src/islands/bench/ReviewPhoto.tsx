@@ -10,7 +10,7 @@ import { ShotStrip } from '#islands/bench/ShotStrip.tsx';
 import { useBenchKeys } from '#islands/bench/use-bench-keys.ts';
 import { closer, moved, onPhoto, STEP, turned, WHOLE } from '#islands/bench/view.ts';
 import { ViewBar } from '#islands/bench/ViewBar.tsx';
-import { TextField } from '#islands/ui/Field.tsx';
+import { Select, TextField } from '#islands/ui/Field.tsx';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { typedBefore } from '#islands/ui/typed-before.ts';
 
@@ -23,9 +23,11 @@ export interface ReviewPhotoProps {
   /** What she has shown before, the newest first, each with the words it is called by. */
   earlier: readonly (Shown & { says: string })[];
   studentName: string;
+  /** What a *mend first* can lead to: steps of the part, common faults in the handbook. */
+  sees: readonly { readonly value: string; readonly label: string }[];
   phrases: readonly string[];
   /** What was typed before, when the form came back or a verdict was taken back. */
-  typed: { words: string; notes: readonly NoteInput[] };
+  typed: { words: string; notes: readonly NoteInput[]; see: string };
   errors: { words?: string | undefined; notes?: string | undefined };
   /** Public id of the photo that is taken in hand after the verdict. */
   next: string | null;
@@ -43,7 +45,7 @@ const NOTHING_SHOWN: Shown = { src: '', width: 4, height: 3, alt: '' };
 const goTo = (address: string | null): void => { if (address !== null) location.assign(address); };
 
 /** The photo at the bench: how it is looked at, pins by mouse, finger or keys, words and phrases, and the verdict. */
-export function ReviewPhoto({ action, publicId, shots, earlier, studentName, phrases, typed, errors, next, before, after }: ReviewPhotoProps) {
+export function ReviewPhoto({ action, publicId, shots, earlier, studentName, sees, phrases, typed, errors, next, before, after }: ReviewPhotoProps) {
   const [answer, change] = useReducer(answerAfter, newAnswer(typed.words, typed.notes));
   const [view, look] = useState(WHOLE);
   const [at, setAt] = useState(0);
@@ -108,6 +110,7 @@ export function ReviewPhoto({ action, publicId, shots, earlier, studentName, phr
           name="words" label={`To ${studentName}`} hint="Goes into the letter, above the notes." error={errors.words} maxLength={2_000} optional
           value={answer.words} onChange={(event) => change({ kind: 'write', words: event.target.value })} onFocus={() => change({ kind: 'choose', index: -1 })}
         />
+        <Select name="see" label="Where it says how to mend it" hint="Goes along with mend first." optional options={[{ value: '', label: 'Nowhere: your words are enough' }, ...sees]} defaultValue={typed.see} />
         <Phrases {...{ phrases, answer, change, studentName }} />
         <div className="verdict">
           <button type="submit" name="verdict" value="weave-on" className="btn btn-on" aria-keyshortcuts="W"><Glyph name="on" />Weave on <span className="key only-desk" aria-hidden="true">W</span></button>

@@ -1,6 +1,6 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
 import type { NoteInput } from '#contracts/bench.ts';
-import { count, json, maybeMoment, moment, oneOf, ref, text } from '#server/db/columns.ts';
+import { count, json, maybeMoment, maybeText, moment, oneOf, ref, text } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /**
@@ -13,6 +13,8 @@ export class HeldVerdict extends Model<InferAttributes<HeldVerdict>, InferCreati
   declare byId: number;
   declare verdict: 'weave-on' | 'mend-first';
   declare words: string;
+  /** Where it says how to mend it (`core/following/see-to-mend.ts`). */
+  declare see: CreationOptional<string | null>;
   declare notes: readonly NoteInput[];
   declare round: number;
   declare goesOutAt: Date | null;
@@ -25,6 +27,7 @@ HeldVerdict.init({
   byId: ref(),
   verdict: oneOf(['weave-on', 'mend-first']),
   words: text(2000),
+  see: maybeText(80),
   notes: json(),
   round: count(),
   goesOutAt: maybeMoment(),

@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { id, maybeMoment, maybeRef, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
+import { id, maybeMoment, maybeRef, maybeText, oneOf, publicId, ref, text, moment } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
 /**
@@ -15,6 +15,8 @@ export class ProgressPhoto extends Model<InferAttributes<ProgressPhoto>, InferCr
   declare words: CreationOptional<string>;
   declare verdict: CreationOptional<'waits' | 'weave-on' | 'mend-first'>;
   declare verdictWords: CreationOptional<string>;
+  /** Where it says how to mend it (`core/following/see-to-mend.ts`). */
+  declare see: CreationOptional<string | null>;
   declare verdictAt: CreationOptional<Date | null>;
   declare verdictById: CreationOptional<number | null>;
   declare createdAt: CreationOptional<Date>;
@@ -30,6 +32,7 @@ ProgressPhoto.init({
   words: { ...text(1000), defaultValue: '' },
   verdict: oneOf(['waits', 'weave-on', 'mend-first'], 'waits'),
   verdictWords: { ...text(2000), defaultValue: '' },
+  see: maybeText(80),
   verdictAt: maybeMoment(),
   verdictById: maybeRef(),
   createdAt: moment(),

@@ -38,7 +38,7 @@ const EARLIER = [{ src: '/e.webp', width: 3, height: 2, alt: 'Earlier photo', sa
 function bench(given: Partial<ReviewPhotoProps> = {}) {
   return render(<main><ReviewPhoto
     action="?_action=bench.giveVerdict" publicId="one" shots={[{ src: '/p.webp', width: 600, height: 400, alt: 'Photo by Maud' }]} earlier={EARLIER} studentName="Maud"
-    phrases={['Tension is even', 'Card sits too high']} typed={{ words: '', notes: [] }} errors={{}} next="two" before={null} after={null} {...given}
+    sees={[{ value: 'fault:slack-end', label: 'Handbook: An end is slack' }]} phrases={['Tension is even', 'Card sits too high']} typed={{ words: '', notes: [], see: '' }} errors={{}} next="two" before={null} after={null} {...given}
   /></main>);
 }
 const words = () => screen.getByRole<HTMLTextAreaElement>('textbox', { name: /^To Maud/ });
@@ -49,7 +49,7 @@ describe('by keys alone', () => {
   test('W says weave on of this photo, with the phrases put in, and names the one that comes next', async () => {
     bench();
     await press('12w');
-    expect(sent).toEqual([{ photo: 'one', next: 'two', notes: '[]', words: 'Tension is even. Card sits too high', verdict: 'weave-on' }]);
+    expect(sent).toEqual([{ photo: 'one', next: 'two', notes: '[]', words: 'Tension is even. Card sits too high', see: '', verdict: 'weave-on' }]);
   });
 
   test('N takes the next of several photos shown together, and pins belong to the one they were put in', async () => {
@@ -156,7 +156,7 @@ describe('by mouse and finger', () => {
   });
 
   test('a pin is dragged by a finger', () => {
-    bench({ typed: { words: '', notes: [{ words: 'Slack', xPermille: 100, yPermille: 100 }] } });
+    bench({ typed: { words: '', notes: [{ words: 'Slack', xPermille: 100, yPermille: 100 }], see: '' } });
     const pin = pins()[0] ?? document.body;
     fireEvent.pointerDown(pin, at(60, 40, 'touch'));
     fireEvent.pointerMove(pin, at(300, 200, 'touch'));

@@ -54,10 +54,11 @@ describe('a verdict', () => {
   test('mend first keeps the next part shut, keeps the pins, and a second photo goes on in the same thread', async () => {
     const all = await scene();
     const first = await photoOf(all);
-    await giveVerdict(await contextFor(all.teacher), says(first, { verdict: 'mend-first', notes: NOTES }));
+    await giveVerdict(await contextFor(all.teacher), says(first, { verdict: 'mend-first', notes: NOTES, see: 'fault:crossed-ends' }));
     await photoOf(all, new Date('2026-12-01T08:00:00Z'));
     const thread = await photoThread(all.seat.id, all.checkpoint.id);
     expect(thread.map(({ verdict, verdictBy, notes }) => [verdict, verdictBy, notes.length])).toEqual([['mend-first', 'Ilse Marrow', 1], ['waits', null, 0]]);
+    expect(thread.map(({ see }) => see)).toEqual(['fault:crossed-ends', null]);
     expect(thread[0]?.notes[0]).toEqual({ words: 'Ends 14 and 15 change places here.', shot: 1, xPermille: 460, yPermille: 520 });
     expect((await seriesFor(await actorOf(all.student), all.series.slug, new Date()))?.parts[1]?.access.may).toBe('wait');
   });
@@ -132,7 +133,7 @@ describe('a verdict on its way', () => {
     await sendVerdicts();
     expect([await Mail.count(), await PhotoNote.count()]).toEqual([0, 0]);
     const { inHand } = await benchDesk(found(teacher.actor), null);
-    expect([inHand?.photo.publicId, inHand?.takenBack]).toEqual([photo.publicId, { words: WORDS.words, notes: JSON.parse(NOTES), by: 'Ilse Marrow', byOther: false }]);
+    expect([inHand?.photo.publicId, inHand?.takenBack]).toEqual([photo.publicId, { words: WORDS.words, notes: JSON.parse(NOTES), see: null, by: 'Ilse Marrow', byOther: false }]);
     expect(await heldBy(found(teacher.actor))).toEqual([]);
   });
 

@@ -23,6 +23,7 @@ import { createLessonReads } from './0021-create-lesson-reads.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
 import { createWeavingTimes } from './0027-create-weaving-times.ts';
 import { createPhotoUploads } from './0028-create-photo-uploads.ts';
+import { addWhatToSee } from './0029-add-what-to-see.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
 
 export const migrations: readonly Migration[] = [
@@ -49,5 +50,6 @@ export const migrations: readonly Migration[] = [
   createRowTallies,
   createWeavingTimes,
   createPhotoUploads,
+  addWhatToSee,
   createOwnLooms,
 ];

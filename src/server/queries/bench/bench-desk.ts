@@ -1,9 +1,10 @@
 /** What lies on the bench: the queue, and for the photo in hand the student's plan and her earlier photos. */
 import { fitPiece } from '#core/craft/fit.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';
+import type { StepOfPart } from '#core/following/see-to-mend.ts';
 import type { NoteInput } from '#contracts/bench.ts';
 import type { Actor } from '#server/context.ts';
-import { HeldVerdict, ProgressPhoto, User } from '#server/models/index.ts';
+import { HeldVerdict, Lesson, LessonVersion, ProgressPhoto, User } from '#server/models/index.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { photoThread, type ThreadPhoto, type ThreadShot } from '#server/queries/photos/photo-thread.ts';
 import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
@@ -14,6 +15,7 @@ import { waitingPhotos, type WaitingPhoto } from './waiting-photos.ts';
 export interface TakenBack {
   readonly words: string;
   readonly notes: readonly NoteInput[];
+  readonly see: string | null;
   readonly by: string;
   readonly byOther: boolean;
 }
@@ -33,6 +35,8 @@ export interface PhotoInHand {
   /** Of the whole seat, the newest first, without the one in hand. */
   readonly earlier: readonly EarlierPhoto[];
   readonly phrases: readonly string[];
+  /** Steps of the part as students read it. */
+  readonly steps: readonly StepOfPart[];
   readonly takenBack: TakenBack | null;
 }
 
@@ -47,19 +51,26 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
   const index = Math.max(0, queue.findIndex(({ publicId }) => publicId === wanted));
   const photo = queue[index];
   if (photo === undefined) return { queue, inHand: null };
-  const [{ pattern, mine }, thread, earlier, phrases, takenBack] = await Promise.all([
+  const [{ pattern, mine }, thread, earlier, phrases, takenBack, steps] = await Promise.all([
     piecesOf(photo.seriesId, photo.enrolmentId),
     photoThread(photo.enrolmentId, photo.lessonId),
     earlierPhotos(photo.enrolmentId, photo.publicId),
     phrasesOfWorkroom(photo.workroomId),
     takenBackOf(actor, photo.publicId),
+    stepsOf(photo.lessonId),
   ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   const placeInThread = thread.findIndex(({ publicId }) => publicId === photo.publicId);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps },
   };
+}
+
+async function stepsOf(lessonId: number): Promise<readonly StepOfPart[]> {
+  const lesson = await Lesson.findByPk(lessonId, { attributes: ['publishedVersionId'] });
+  const version = lesson?.publishedVersionId == null ? null : await LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['facts'] });
+  return version?.facts.steps ?? [];
 }
 
 async function takenBackOf(actor: Actor, publicId: string): Promise<TakenBack | null> {
@@ -67,5 +78,5 @@ async function takenBackOf(actor: Actor, publicId: string): Promise<TakenBack | 
   const held = photo === null ? null : await HeldVerdict.findByPk(photo.id);
   if (held === null || held.goesOutAt !== null) return null;
   const by = await User.findByPk(held.byId);
-  return { words: held.words, notes: held.notes, by: by?.name ?? '', byOther: held.byId !== actor.userId };
+  return { words: held.words, notes: held.notes, see: held.see, by: by?.name ?? '', byOther: held.byId !== actor.userId };
 }

@@ -24,6 +24,8 @@ export interface ThreadPhoto {
   readonly postedAt: Date;
   readonly verdict: 'waits' | 'weave-on' | 'mend-first';
   readonly verdictWords: string;
+  /** Where it says how to mend it. */
+  readonly see: string | null;
   readonly verdictAt: Date | null;
   readonly verdictBy: string | null;
   /** True when a helper answered, not the teacher. */
@@ -38,7 +40,7 @@ type PhotoRow = Omit<ThreadPhoto, 'shots' | 'notes' | 'byHelper'> & { id: number
 export async function photoThread(enrolmentId: number, lessonId: number): Promise<ThreadPhoto[]> {
   const photos = await sequelize.query<PhotoRow>(
     `SELECT p.id, p.public_id AS publicId, p.words, p.created_at AS postedAt,
-            p.verdict, p.verdict_words AS verdictWords, p.verdict_at AS verdictAt, b.name AS verdictBy,
+            p.verdict, p.verdict_words AS verdictWords, p.see, p.verdict_at AS verdictAt, b.name AS verdictBy,
             (b.id IS NOT NULL AND b.id <> w.owner_id) AS byHelper
        FROM progress_photos p
        JOIN enrolments e ON e.id = p.enrolment_id

@@ -22,7 +22,7 @@ export async function sendVerdict(ctx: Context, { photoId, round }: SaidVerdict)
     const photo = await ProgressPhoto.findByPk(photoId, { lock: true });
     const held = await HeldVerdict.findByPk(photoId);
     if (photo === null || held === null || held.goesOutAt === null || held.round !== round) return;
-    await photo.update({ verdict: held.verdict, verdictWords: held.words, verdictAt: ctx.clock.now(), verdictById: held.byId });
+    await photo.update({ verdict: held.verdict, verdictWords: held.words, see: held.see, verdictAt: ctx.clock.now(), verdictById: held.byId });
     await PhotoNote.bulkCreate(held.notes.map((note, index) => ({ photoId, position: index + 1, authorId: held.byId, ...note })));
     await tellStudent(photo, held);
     await held.destroy();
