@@ -185,6 +185,6 @@ describe('by mouse and finger', () => {
 });
 
 test('words typed before the script woke stay', () => {
-  const view = bench({ typed: { words: 'From the server', notes: [] } });
+  const view = bench({ typed: { words: 'From the server', notes: [], see: '' } });
   expect(view.container.querySelector('textarea')?.value).toBe('From the server');
 });
