@@ -69,7 +69,8 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
 
 async function stepsOf(lessonId: number): Promise<readonly StepOfPart[]> {
   const lesson = await Lesson.findByPk(lessonId, { attributes: ['publishedVersionId'] });
-  const version = lesson?.publishedVersionId == null ? null : await LessonVersion.findByPk(lesson.publishedVersionId, { attributes: ['facts'] });
+  const versionId = lesson?.publishedVersionId ?? null;
+  const version = versionId === null ? null : await LessonVersion.findByPk(versionId, { attributes: ['facts'] });
   return version?.facts.steps ?? [];
 }
 
