@@ -2,7 +2,8 @@ import { useMemo } from 'react';
 import { countOf, lengthOf, massOf, type Amount } from '#core/craft/amounts/amount-types.ts';
 import { amountOfWoven } from '#core/craft/frame-loom/fit-woven.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
-import type { MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import type { MineFound, MineJudgement } from '#core/craft/my-piece/judge-mine.ts';
+import type { WarpPlan } from '#core/craft/plan-types.ts';
 import { wovenShare } from '#core/craft/rest/woven-share.ts';
 import { loomFigures } from '#core/series/loom-figures.ts';
 import { hoursRange, likelyHours } from '#core/series/hours-words.ts';
@@ -40,8 +41,9 @@ export function MineAnswer({ name, teacher, pattern, judged, units }: MineAnswer
       {judged.ok && judged.halfway !== null && <RestAnswer made={judged.fitted} halfway={judged.halfway} units={units} />}
       {judged.ok && judged.halfway !== null && <h2 className="h3">The whole piece</h2>}
       {made !== null && <Figures items={figuresOf(made, pattern, units)} />}
+      {made !== null && <Yarns {...{ made, pattern, teacher, units }} />}
       {judged.ok
-        ? <><Findings found={judged.warnings} /><Words says={judged.fitted.changes} /></>
+        ? <><Findings found={onceEach(judged.warnings)} /><Words says={judged.fitted.changes} /></>
         : <Findings found={judged.problems} />}
       {made !== null && <Reckoned made={made} units={units} />}
     </div>
@@ -88,6 +90,25 @@ function figuresOf(made: MadeOnLoom, pattern: MadeOnLoom, units: Units): Figure[
     both('Weft yarn', (figures) => formatAmount(massOf(figures.weftGrams), units)),
     { ...hours, was: [hoursRange(mine.hours), hours.was].filter(Boolean).join(', ') },
   ];
+}
+
+/** What is true of many yarns is said once. */
+const onceEach = (found: readonly MineFound[]): MineFound[] => [...new Map(found.map((one) => [one.says, one])).values()];
+
+/** Each yarn beside the pattern's, margins included. */
+function Yarns({ made, pattern, teacher, units }: { made: MadeOnLoom; pattern: MadeOnLoom; teacher: string; units: Units }) {
+  const length = (plan: WarpPlan | undefined): string => amountText(lengthOf(plan?.withMarginMm ?? 0, 'yarn'), units);
+  const rows = [
+    { role: 'warp', label: made.piece.warp.yarn.label, was: length(pattern.plan.warp), is: length(made.plan.warp) },
+    ...Object.entries(made.piece.yarns).map(([role, { label }]) => ({ role, label, was: length(pattern.plan.yarns[role]), is: length(made.plan.yarns[role]) })),
+  ];
+  return (
+    <table className="table mini">
+      <caption className="hide">Yarn to have, beside the pattern</caption>
+      <thead><tr><th scope="col">Yarn to have</th><th scope="col" className="num">{teacher}’s</th><th scope="col" className="num">Yours</th></tr></thead>
+      <tbody>{rows.map(({ role, label, was, is }) => <tr key={role}><th scope="row">{label ?? role}{label !== undefined && <span className="quiet"> ({role})</span>}</th><td className="num">{was}</td><td className="num">{is}</td></tr>)}</tbody>
+    </table>
+  );
 }
 
 const KEYS = ['ends', 'nails', 'spacing', 'wound-width', 'loom.width', 'loom.height', 'warp', 'pick', 'spacer.width', 'spacer.height', 'dowel.length', 'hours'];
