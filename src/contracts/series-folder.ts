@@ -3,6 +3,7 @@ import { z } from 'astro/zod';
 import { CAPTION_LIMITS } from '#core/captions/caption-faults.ts';
 import { CRAFT_NAMES } from '#core/craft/crafts.ts';
 import { isCurrency } from '#core/money/currency.ts';
+import type { FolderFault } from '#core/series-folder/judge-entries.ts';
 
 // Not trimmed: what goes out comes in again sign for sign.
 const words = (most: number) => z.string().max(most).refine((text) => text.trim() !== '', 'There are no words here.');
@@ -81,3 +82,28 @@ export const SeriesFile = z.object({
 export type SeriesFile = z.output<typeof SeriesFile>;
 /** As it is written: what is not said takes its default. */
 export type WrittenSeriesFile = z.input<typeof SeriesFile>;
+
+/** What is told of a folder that came in. */
+export interface BroughtIn {
+  readonly partCount: number;
+  /** Films that the worker makes ready now. */
+  readonly filmCount: number;
+  /** What came in as it is and has to be mended before publishing. */
+  readonly toMend: readonly FolderFault[];
+}
+
+/** Why a folder did not come in. */
+export interface FolderRefusal {
+  readonly says: string;
+  readonly faults: readonly FolderFault[];
+}
+
+/** Where a folder stands on its way in. */
+export type ImportState = { readonly publicId: string; readonly fileName: string; readonly cameAt: Date } & (
+  /** So many folders are before it. */
+  | { readonly state: 'waiting'; readonly before: number }
+  | { readonly state: 'working'; readonly filesDone: number; readonly filesAll: number }
+  /** `slug` and `title` are null when the series was deleted since. */
+  | { readonly state: 'done'; readonly slug: string | null; readonly title: string | null; readonly told: BroughtIn }
+  | { readonly state: 'refused'; readonly told: FolderRefusal }
+);

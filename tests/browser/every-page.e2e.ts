@@ -79,7 +79,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
-const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
+const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
 
 test('every page of the program is looked at', () => {
   const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));

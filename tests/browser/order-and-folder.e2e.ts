@@ -79,6 +79,11 @@ test.describe('by finger on a phone', () => {
     await expectFaultless(page);
     await field.setInputFiles({ name: 'low-tide.zip', mimeType: 'application/zip', buffer: zip });
     await inMain(page).getByRole('button', { name: 'Bring it in' }).tap();
+    await expect(page).toHaveURL(/\/workroom\/series\/bring-in\/[0-9a-z]{26}$/);
+    // The page opens anew by itself when the worker is done.
+    await expect(inMain(page).getByText(/came in\. It is a draft with 7 parts/)).toBeVisible({ timeout: 20_000 });
+    await expectFaultless(page);
+    await inMain(page).getByRole('link', { name: 'Open the series' }).tap();
     await expect(page).toHaveURL(/\/workroom\/series\/low-tide-[0-9a-z-]+$/);
     await expect(inMain(page).getByText('Draft: nobody but you sees it')).toBeVisible();
     await expectFaultless(page);

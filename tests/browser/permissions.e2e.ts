@@ -118,6 +118,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/money': [{ at: '/workroom/money', answers: TEACHERS }],
   '/workroom/series/new': [{ at: '/workroom/series/new', answers: TEACHERS }],
   '/workroom/series/bring-in': [{ at: '/workroom/series/bring-in', answers: TEACHERS }],
+  '/workroom/series/bring-in/[folder]': [{ at: '/workroom/series/bring-in/no-such-folder', answers: '303 403 403 404 404 403 403' }],
   '/workroom/series/[slug]': [{ at: '/workroom/series/low-tide', answers: OWNER }],
   '/workroom/series/[slug]/folder': [{ at: '/workroom/series/low-tide/folder', answers: OWNER }],
   '/workroom/series/[slug]/piece': [{ at: '/workroom/series/low-tide/piece', answers: OWNER }],

@@ -15,8 +15,8 @@ export type SaidBlock =
   | { readonly kind: 'prose'; readonly runs: readonly Run[] }
   | { readonly kind: 'points'; readonly items: readonly (readonly Run[])[] };
 
-/** `answer`: to a question of hers. */
-export const TOLD_KINDS = ['notice', 'nudge', 'opening', 'verdict', 'seat', 'answer'] as const;
+/** `answer`: to a question of hers. `folder`: of a series, which came in or did not. */
+export const TOLD_KINDS = ['notice', 'nudge', 'opening', 'verdict', 'seat', 'answer', 'folder'] as const;
 export type ToldKind = (typeof TOLD_KINDS)[number];
 
 export interface Said {

@@ -1,5 +1,6 @@
 /** One round of the worker: claims due jobs, does them, writes down how each ended. */
 import type { Context } from '#server/context.ts';
+import { LONG_LANES, type LongLane } from '#server/jobs/definition.ts';
 import type { Held, RegisteredJob } from '#server/jobs/handlers/index.ts';
 import { claimDue, finishDead, finishDone, finishLater, renewLease } from '#server/jobs/leases.ts';
 import { Job } from '#server/models/index.ts';
@@ -9,23 +10,23 @@ const LEASE_SECONDS = 300;
 const LONG_LEASE_SECONDS = 60;
 const RENEW_SECONDS = 15;
 
-const longTypes = (jobs: readonly RegisteredJob[]): string[] => jobs.filter(({ definition }) => definition.isLong).map(({ definition }) => definition.type);
+const typesIn = (lanes: readonly LongLane[], jobs: readonly RegisteredJob[]): string[] => jobs.filter(({ definition: { lane } }) => lane !== 'quick' && lanes.includes(lane)).map(({ definition }) => definition.type);
 
 /** Does what is due of the quick jobs. @returns how many were claimed. */
 export async function runDueJobs(ctx: Context, owner: string, jobs: readonly RegisteredJob[], limit = 4): Promise<number> {
-  const claims = await claimDue('jobs', owner, limit, LEASE_SECONDS, { not: longTypes(jobs) });
+  const claims = await claimDue('jobs', owner, limit, LEASE_SECONDS, { not: typesIn(LONG_LANES, jobs) });
   const never = new AbortController().signal;
   await Promise.all(claims.map(({ id, attempts }) => runOne(ctx, owner, jobs, id, { attempts, signal: never })));
   return claims.length;
 }
 
 /**
- * Does one long job, holding it as long as it takes. When `signal` aborts, or another worker took it over, it is dropped
+ * Does one job of a long lane, holding it as long as it takes. When `signal` aborts, or another worker took it over, it is dropped
  * where it stands; whoever claims it next begins it anew.
  * @returns how many were claimed.
  */
-export async function runLongJob(ctx: Context, owner: string, jobs: readonly RegisteredJob[], signal: AbortSignal): Promise<number> {
-  const types = longTypes(jobs);
+export async function runLongJob(ctx: Context, lane: LongLane, owner: string, jobs: readonly RegisteredJob[], signal: AbortSignal): Promise<number> {
+  const types = typesIn([lane], jobs);
   const [claim] = types.length === 0 ? [] : await claimDue('jobs', owner, 1, LONG_LEASE_SECONDS, { only: types });
   if (claim === undefined) return 0;
   const lost = new AbortController();

@@ -3,6 +3,7 @@ import { hostname } from 'node:os';
 import { setTimeout as pause } from 'node:timers/promises';
 import { randomUUID } from 'node:crypto';
 import { systemClock, type Context } from '#server/context.ts';
+import { LONG_LANES, type LongLane } from '#server/jobs/definition.ts';
 import type { RegisteredJob } from '#server/jobs/handlers/index.ts';
 import { releaseAll } from '#server/jobs/leases.ts';
 import { runDueJobs, runLongJob } from '#server/jobs/run-due.ts';
@@ -24,17 +25,17 @@ export function workerContext(): Context {
   return { actor: null, requestId: `worker-${randomUUID()}`, ip: '127.0.0.1', clock: systemClock, services: services() };
 }
 
-/** Works until `signal` aborts; then finishes the quick things it holds, drops the long one, and gives back the rest. */
+/** Works until `signal` aborts; then finishes the quick things it holds, drops the long ones, and gives back the rest. */
 export async function work(options: WorkerOptions): Promise<void> {
   const owner = `${hostname().slice(0, 20).replace(/[^\x21-\x7e]/g, '')}-${process.pid}-${randomUUID().slice(0, 8)}`;
-  await Promise.all([quickLane(options, owner), longLane(options, owner)]);
+  await Promise.all([quickLane(options, owner), ...LONG_LANES.map((lane) => longLane(lane, options, owner))]);
   await Promise.all([releaseAll('jobs', owner), releaseAll('mails', owner)]);
 }
 
-/** A film takes as long as it lasts; no letter waits for that. */
-async function longLane({ jobs, signal }: WorkerOptions, owner: string): Promise<void> {
+/** What takes minutes or hours, one at a time; no letter waits for that. */
+async function longLane(lane: LongLane, { jobs, signal }: WorkerOptions, owner: string): Promise<void> {
   while (!signal.aborted) {
-    const claimed = await runLongJob(workerContext(), owner, jobs, signal).catch((error: unknown) => tellTrouble(owner, error, signal));
+    const claimed = await runLongJob(workerContext(), lane, owner, jobs, signal).catch((error: unknown) => tellTrouble(owner, error, signal));
     if (claimed === 0) await pause(IDLE_MS, undefined, { signal }).catch(() => undefined);
   }
 }

@@ -68,7 +68,7 @@ export async function takePhoto(store: MediaStore, path: string, folder: string)
         .resize({ width: side, height: side, fit: 'inside', withoutEnlargement: true })
         .webp({ quality })
         .toFile(temporary);
-      const key = `${folder}/${name}.webp`;
+      const key = keyOf(folder, name);
       await store.put(key, temporary);
       files[name] = { key, contentType: 'image/webp', byteCount: size, width, height };
       byteCount += size;
@@ -79,6 +79,15 @@ export async function takePhoto(store: MediaStore, path: string, folder: string)
     }
   }
   return { ...upright, byteCount, files };
+}
+
+/** Removes what `takePhoto` put under `folder`. */
+export async function removePhoto(store: MediaStore, folder: string): Promise<void> {
+  await Promise.all(Object.keys(RENDITIONS).map((name) => store.remove(keyOf(folder, name))));
+}
+
+function keyOf(folder: string, name: string): string {
+  return `${folder}/${name}.webp`;
 }
 
 /** Width and height as seen, after the limits were checked; nothing is decoded for this. */

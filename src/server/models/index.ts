@@ -35,6 +35,7 @@ export { RefusedAddress } from './refused-address.ts';
 export { Review } from './review.ts';
 export { RowTally } from './row-tally.ts';
 export { Series } from './series.ts';
+export { SeriesImport } from './series-import.ts';
 export { SeriesMedia } from './series-media.ts';
 export { Session } from './session.ts';
 export { StockPhrase } from './stock-phrase.ts';

@@ -92,6 +92,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/helpers': 'bench',
   '/workroom/series/new': 'teacher',
   '/workroom/series/bring-in': 'teacher',
+  '/workroom/series/bring-in/[folder]': 'teacher',
   '/workroom/series/[slug]': 'teacher',
   '/workroom/series/[slug]/before': 'teacher',
   '/workroom/things': 'teacher',

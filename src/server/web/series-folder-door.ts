@@ -1,9 +1,11 @@
 /** A series' way out of the house and into it, as a zip. */
+import { randomUUID } from 'node:crypto';
 import { sizeWords } from '#core/video/limits.ts';
 import { FOLDER_LIMITS } from '#core/series-folder/limits.ts';
 import type { Context } from '#server/context.ts';
 import { AppError, signedIn } from '#server/errors.ts';
-import { bringInSeries, type BroughtIn } from '#server/use-cases/series-folder/bring-in-series.ts';
+import { displayName } from '#server/media/display-name.ts';
+import { receiveFolder } from '#server/use-cases/series-folder/receive-folder.ts';
 import { takeSeries } from '#server/use-cases/series-folder/take-series.ts';
 import { withMultipart } from '#server/web/multipart.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
@@ -23,8 +25,15 @@ export async function sendSeriesFolder(ctx: Context, slug: string, withFilms: bo
 }
 
 export type BringInAnswer =
-  | { readonly ok: true; readonly to: string; readonly said: string }
+  | { readonly ok: true; readonly to: string }
   | { readonly ok: false; readonly status: number; readonly summary: string; readonly problems: readonly string[] };
+
+/** A key for one form: pressed twice, it comes in once. */
+export function newPressKey(): string {
+  return randomUUID();
+}
+
+const PRESS_KEY = /^[0-9a-f-]{36}$/;
 
 /** Takes the form of the page that brings a series in. Bugs pass through. */
 export async function answerBringIn(ctx: Context, request: Request): Promise<BringInAnswer> {
@@ -32,25 +41,16 @@ export async function answerBringIn(ctx: Context, request: Request): Promise<Bri
     await countUse(RATE_RULES.seriesFolder, signedIn(ctx).publicId);
     await ctx.services.media.requireRoom(2 * Number(request.headers.get('content-length') ?? 0));
     const limits = { field: 'folder', maxBytes: FOLDER_LIMITS.maxZipBytes, tooLargeSays: `This zip is larger than ${MOST}. Take the series along without films, and send those one by one, in their parts.` };
-    const came = await withMultipart(request, ctx.services.media, limits, ({ file, fault }) => {
+    const publicId = await withMultipart(request, ctx.services.media, limits, ({ fields, file, fault }) => {
       if (fault !== null) throw fault;
       if (file === null || file.byteCount === 0) throw new AppError('VALIDATION', { says: 'No file came with this form. Choose a zip and send it again.' });
-      return bringInSeries(ctx, { path: file.path });
+      const { key = '' } = fields;
+      return receiveFolder(ctx, { path: file.path, fileName: displayName(file.originalName), byteCount: file.byteCount, pressKey: PRESS_KEY.test(key) ? key : newPressKey() });
     });
-    return { ok: true, to: `/workroom/series/${came.slug}`, said: saidOf(came) };
+    return { ok: true, to: `/workroom/series/bring-in/${publicId}` };
   } catch (error) {
     const known = knownError(error);
     if (known.code === 'BUG') throw error;
     return { ok: false, status: known.status, summary: known.says, problems: Object.entries(known.fields).map(([file, says]) => (file === 'zip' ? says : `${file}: ${says}`)) };
   }
-}
-
-const MOST_SAID = 400;
-
-function saidOf({ title, partCount, filmCount, toMend }: BroughtIn): string {
-  const parts = partCount === 1 ? 'one part' : `${partCount} parts`;
-  const films = filmCount === 0 ? '' : ` ${filmCount === 1 ? 'Its film is' : `Its ${filmCount} films are`} being made ready.`;
-  const mend = toMend.map(({ file, says }) => ` To mend in ${file}: ${says}`).join('');
-  const said = `“${title}” is here as a draft, with ${parts}.${films}${mend}`;
-  return said.length > MOST_SAID ? `${said.slice(0, MOST_SAID)}…` : said;
 }

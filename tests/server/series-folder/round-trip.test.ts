@@ -10,11 +10,11 @@ import { config } from '#server/config.ts';
 import { readShipped } from '#server/demo/series.ts';
 import { takePhoto } from '#server/media/photo.ts';
 import { GatheringItem, Job, Lesson, Media, PatternPiece, Series, SeriesMedia } from '#server/models/index.ts';
-import { bringInSeries } from '#server/use-cases/series-folder/bring-in-series.ts';
 import { importSeries } from '#server/use-cases/series-folder/import-series.ts';
 import { takeSeries } from '#server/use-cases/series-folder/take-series.ts';
 import { contextFor, type TestContext } from '../../support/context.ts';
 import { buildGatheringItem, buildLesson, buildSeries, buildUser, buildWorkroom } from '../../support/factories.ts';
+import { bringInAtOnce } from '../../support/folders.ts';
 
 let teacher: TestContext;
 let other: TestContext;
@@ -34,7 +34,7 @@ async function take(slug: string, withFilms = true, ctx = teacher): Promise<stri
 }
 
 async function thereAndBack(slug: string, withFilms = true): Promise<Series> {
-  const { slug: back } = await bringInSeries(other, { path: pathOf(await take(slug, withFilms)) });
+  const { slug: back } = await bringInAtOnce(other, pathOf(await take(slug, withFilms)));
   return Series.findOne({ where: { slug: back }, rejectOnEmpty: true });
 }
 
@@ -136,7 +136,7 @@ describe('what belongs to a series', () => {
     const gone = await buildLesson({ seriesId: series.id, position: 1, takenOutAt: new Date() });
     const { draftReading } = await buildLesson({ seriesId: series.id, position: 2, draftSource: 'Wind {1} ends.', publishedVersionId: null, opens: { rule: 'after-verdict', lesson: gone.publicId } });
     expect(draftReading.ok).toBe(false);
-    const { slug, toMend } = await bringInSeries(other, { path: pathOf(await take(series.slug)) });
+    const { slug, toMend } = await bringInAtOnce(other, pathOf(await take(series.slug)));
     expect(toMend).toMatchObject([{ file: '01-part-2.mdx', says: expect.stringMatching(/^Line 1: /) }, { file: 'series.yaml', says: expect.stringContaining('Part 1 waits') }]);
     const back = await Lesson.findOne({ include: [], where: { seriesId: (await Series.findOne({ where: { slug }, rejectOnEmpty: true })).id } });
     expect([back?.draftSource, back?.opens]).toEqual(['Wind {1} ends.', { rule: 'after-verdict', lesson: '' }]);

@@ -156,22 +156,22 @@ describe('the worker', () => {
   test('keeps films apart from quick work, and does one at a time', async () => {
     await arrived(makeClip(folder, 'clip.mp4'));
     expect(await runDueJobs(ctx, 'quick', REGISTERED)).toBe(0);
-    expect(await runLongJob(ctx, 'long', REGISTERED, still)).toBe(1);
+    expect(await runLongJob(ctx, 'films', 'long', REGISTERED, still)).toBe(1);
     expect([await Media.count({ where: { state: 'ready' } }), await Job.count({ where: { state: 'done' } })]).toEqual([1, 1]);
   });
 
   test('that is stopped leaves nothing of the try behind, and the next one begins anew and ends it', async () => {
     const media = await arrived(makeClip(folder, 'clip.mp4', { seconds: 12, size: '640x360', rate: 30 }));
     const stop = new AbortController();
-    const run = runLongJob(ctx, 'first', REGISTERED, stop.signal);
+    const run = runLongJob(ctx, 'films', 'first', REGISTERED, stop.signal);
     await expect.poll(async () => (await media.reload()).state, { timeout: 30_000 }).toBe('processing');
     stop.abort(new Error('the worker stops'));
     await run;
     expect(await leftovers()).toEqual([media.publicId]);
-    expect(await runLongJob(ctx, 'second', REGISTERED, still)).toBe(0);
+    expect(await runLongJob(ctx, 'films', 'second', REGISTERED, still)).toBe(0);
     // As when the first one's lease has run out.
     await sequelize.query("UPDATE jobs SET lease_until = UTC_TIMESTAMP(3) - INTERVAL 1 SECOND WHERE state = 'ready'");
-    expect(await runLongJob(ctx, 'second', REGISTERED, still)).toBe(1);
+    expect(await runLongJob(ctx, 'films', 'second', REGISTERED, still)).toBe(1);
     expect((await media.reload()).state).toBe('ready');
   });
 
@@ -189,7 +189,7 @@ describe('the worker', () => {
   test('gives up in words for the teacher when every try took it down', async () => {
     const media = await arrived(makeClip(folder, 'clip.mp4'));
     await Job.update({ attempts: processVideo.maxAttempts }, { where: {} });
-    await runLongJob(ctx, 'long', REGISTERED, still);
+    await runLongJob(ctx, 'films', 'long', REGISTERED, still);
     expect(await media.reload()).toMatchObject({ state: 'failed', failure: expect.stringContaining('could not make this video ready') });
     expect((await Job.findOne())?.state).toBe('dead');
   });

@@ -20,6 +20,7 @@ import { createQuestions } from './0018-create-questions.ts';
 import { createHelperInvitations } from './0019-create-helper-invitations.ts';
 import { createKeptThings } from './0020-create-kept-things.ts';
 import { createLessonReads } from './0021-create-lesson-reads.ts';
+import { createSeriesImports } from './0022-create-series-imports.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
 import { createWeavingTimes } from './0027-create-weaving-times.ts';
 import { createPhotoUploads } from './0028-create-photo-uploads.ts';
@@ -47,9 +48,11 @@ export const migrations: readonly Migration[] = [
   createHelperInvitations,
   createKeptThings,
   createLessonReads,
+  createSeriesImports,
   createRowTallies,
   createWeavingTimes,
   createPhotoUploads,
   addWhatToSee,
   createOwnLooms,
 ];
+import { createOwnLooms } from './0032-create-own-looms.ts';

@@ -5,6 +5,7 @@ import type { JobDefinition } from '#server/jobs/definition.ts';
 import { sendVerdict } from '#server/jobs/definitions/bench.ts';
 import { handOutNotice } from '#server/jobs/definitions/notices.ts';
 import { settleCheckout, settlePaymentEvent } from '#server/jobs/definitions/payments.ts';
+import { bringInFolder } from '#server/jobs/definitions/series-folder.ts';
 import { processVideo } from '#server/jobs/definitions/videos.ts';
 import { sendPasswordLink } from '#server/jobs/definitions/people.ts';
 
@@ -54,6 +55,11 @@ export const REGISTERED: readonly RegisteredJob[] = [
       const { giveUpVideo } = await import('#server/use-cases/videos/give-up-video.ts');
       return (ctx, { video }) => giveUpVideo(ctx, video);
     },
+  ),
+  bind(
+    bringInFolder,
+    async () => (await import('#server/use-cases/series-folder/bring-in-folder.ts')).bringInFolder,
+    async () => (await import('#server/use-cases/series-folder/bring-in-folder.ts')).giveUpFolder,
   ),
   bind(
     sendVerdict,

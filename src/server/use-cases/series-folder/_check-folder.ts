@@ -8,7 +8,7 @@ import { instantOfWall } from '#core/timetable/opening.ts';
 import { readLessonText } from '#server/lesson-text/parse-pool.ts';
 import type { ParseResult } from '#server/lesson-text/serve-parses.ts';
 import { listFromYaml } from '#core/series-folder/list-as-yaml.ts';
-import { refused } from '#server/series-folder/open-zip.ts';
+import { refused, type OpenFolder } from '#server/series-folder/open-zip.ts';
 
 /** Reads one file of the folder as text; null when there is none. */
 export type ReadFile = (name: string) => Promise<string | null>;
@@ -19,6 +19,11 @@ export interface CheckedFolder {
   readonly texts: readonly { readonly source: string; readonly reading: ParseResult }[];
   /** What may come into the workroom as it is, and has to be mended before it can be published. */
   readonly toMend: readonly FolderFault[];
+}
+
+/** What a zip's directory and its list already tell. @throws VALIDATION with a sentence for each file. */
+export async function checkList(zip: OpenFolder): Promise<void> {
+  requireAllNamed(zip.names, await readSeriesFile((name) => zip.text(name)));
 }
 
 /**
@@ -47,6 +52,15 @@ export async function checkFolder(read: ReadFile): Promise<CheckedFolder> {
   }
   if (faults.length > 0) throw refused(faults);
   return { file, piece, texts, toMend };
+}
+
+/** A file that nothing speaks of would be lost without a word. */
+function requireAllNamed(names: readonly string[], { lessons, videos, pictures }: SeriesFile): void {
+  const named = new Set(['series.yaml', 'piece.json', ...lessons.map(({ file }) => file), ...videos.flatMap(({ film, captions }) => [film, captions]), ...pictures.map(({ file }) => file)]);
+  const faults = names.filter((name) => !named.has(name)).map((file) => ({ file, says: 'series.yaml says nothing of this file. Name it there, or take it out.' }));
+  const twice = [...videos, ...pictures].map(({ name }) => name).find((name, index, all) => all.indexOf(name) !== index);
+  if (twice !== undefined) faults.push({ file: 'series.yaml', says: `Two videos or pictures have the name ${twice}.` });
+  if (faults.length > 0) throw refused(faults);
 }
 
 function isOpenable({ lessons }: SeriesFile, index: number, part: number | undefined): boolean {

@@ -37,23 +37,41 @@ export interface TakenMedia {
   undo(): Promise<void>;
 }
 
+/** How what is done is told, and stopped. */
+export interface MediaSteps {
+  readonly signal: AbortSignal;
+  /** Before the first file is put in its place: under which public ids. */
+  willPut(mediaIds: readonly string[]): Promise<void>;
+  /** After each: how many are. */
+  hasPut(count: number): Promise<void>;
+}
+
 /**
  * Puts pictures, decoded and written anew, and films, as an upload that has just arrived, in their places.
- * @throws VALIDATION with a sentence for each file that does not fit; then nothing is left.
+ * @throws VALIDATION with a sentence for each file that does not fit, the signal's reason when it aborts; then nothing is left.
  */
-export async function takeMedia(store: MediaStore, folder: OpenFolder, { videos, pictures }: SeriesFile): Promise<TakenMedia> {
+export async function takeMedia(store: MediaStore, folder: OpenFolder, { videos, pictures }: SeriesFile, steps: MediaSteps): Promise<TakenMedia> {
   const undone: (() => Promise<void>)[] = [];
   const undo = async (): Promise<void> => { await Promise.all(undone.map((act) => act())); };
   const faults: FolderFault[] = [];
   const taken: { videos: TakenVideo[]; pictures: TakenPicture[] } = { videos: [], pictures: [] };
+  const ids = [...videos, ...pictures].map(() => newPublicId());
+  await steps.willPut(ids);
+  let begun = 0;
+  const next = async (): Promise<string> => {
+    steps.signal.throwIfAborted();
+    if (begun > 0) await steps.hasPut(begun);
+    begun += 1;
+    return ids[begun - 1] ?? newPublicId();
+  };
   try {
     for (const entry of videos) {
-      const publicId = newPublicId();
+      const publicId = await next();
       const detail = await wordsOf(folder, entry, faults);
       taken.videos.push({ publicId, entry, detail, filmBytes: await takeFilm(store, folder, entry, publicId, undone, faults) });
     }
     for (const entry of pictures) {
-      const publicId = newPublicId();
+      const publicId = await next();
       const photo = await takePicture(store, folder, entry, publicId, faults);
       if (photo === null) continue;
       undone.push(async () => { await Promise.all(Object.values(photo.files).map(({ key }) => store.remove(key))); });

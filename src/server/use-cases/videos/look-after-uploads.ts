@@ -6,8 +6,8 @@ import type { Context } from '#server/context.ts';
 import { VIDEO_UPLOADS_FOLDER, VIDEO_WORK_FOLDER } from '#server/media/video/folders.ts';
 import type { MediaStore } from '#server/media/store.ts';
 import { sweep } from '#server/media/sweep.ts';
-import { SERIES_FOLDERS } from '#server/series-folder/folders.ts';
-import { Media, SeriesMedia, VideoUpload } from '#server/models/index.ts';
+import { ARRIVED_FOLDERS, SERIES_FOLDERS } from '#server/series-folder/folders.ts';
+import { Media, SeriesImport, SeriesMedia, VideoUpload } from '#server/models/index.ts';
 import { forgetUpload } from './_forget-upload.ts';
 import { sendToWorker } from './_send-to-worker.ts';
 
@@ -17,7 +17,7 @@ const UNUSED_MS = 30 * 24 * HOUR_MS;
 
 /**
  * Sends on what came whole while its server died, forgets what was not finished in time, and sweeps away what no row
- * speaks of, what workers that died left behind, zips of series, and films that were replaced long ago.
+ * speaks of, what workers that died left behind, zips of series, what was told of folders, and films that were replaced long ago.
  */
 export async function lookAfterUploads({ clock, services }: Context): Promise<void> {
   const now = clock.now().getTime();
@@ -38,6 +38,9 @@ export async function lookAfterUploads({ clock, services }: Context): Promise<vo
   await sweep(folder, new Set(known.map(({ publicId }) => publicId)), now);
   await sweep(await services.media.temporaryFolder(VIDEO_WORK_FOLDER), new Set(), now);
   await sweep(await services.media.temporaryFolder(SERIES_FOLDERS), new Set(), now);
+  const arrived = await SeriesImport.findAll({ where: { state: 'waiting' }, attributes: ['publicId'] });
+  await sweep(await services.media.temporaryFolder(ARRIVED_FOLDERS), new Set(arrived.map(({ publicId }) => publicId)), now);
+  await SeriesImport.destroy({ where: { state: ['done', 'refused'], updatedAt: { [Op.lt]: new Date(now - UNUSED_MS) } } });
   await removeUnused(services.media, new Date(now - UNUSED_MS));
 }
 
