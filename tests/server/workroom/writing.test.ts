@@ -202,6 +202,16 @@ describe('settings of a part', () => {
     await expect(saveLessonSettings(ctx, { ...settings({ rule: 'after-verdict', after: second.publicId }), lesson: first.publicId })).rejects.toMatchObject({ fields: { after: expect.stringContaining('comes later') } });
   });
 
+  test('a fourth part that would open before the third is refused at its date while the series is open, and nothing is kept', async () => {
+    const seriesId = series.id;
+    await buildLesson({ seriesId, position: 3, opens: { rule: 'on-date', wall: '2027-07-08T09:00', zone: 'Europe/Berlin' }, opensAt: new Date('2027-07-08T07:00:00Z') });
+    const fourth = await buildLesson({ seriesId, position: 4, title: 'Fringe' });
+    await series.update({ state: 'published' });
+    const early = settings({ lesson: fourth.publicId, rule: 'on-date', wall: '2027-07-01T09:00' });
+    await expect(saveLessonSettings(ctx, early)).rejects.toMatchObject({ code: 'VALIDATION', fields: { wall: 'People follow this series, so nothing was changed. Part 4 would be stuck: It opens before Part 3. Parts open in their order.' } });
+    expect(await fourth.reload()).toMatchObject({ title: 'Fringe', opens: { rule: 'at-once' } });
+  });
+
   test('a photo that others wait for stays while the series is open', async () => {
     await second.update({ opens: { rule: 'after-verdict', lesson: first.publicId } });
     await first.update({ checkpoint: { ask: 'Show it', look: [] } });
