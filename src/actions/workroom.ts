@@ -1,7 +1,7 @@
 /** Forms of the teacher's workroom: series, parts and their order, texts, settings, gathering lists, publishing. */
 import {
   GatheringForm, GatheringItemForm, KeptThingForm, KeptThingItemForm, LessonDraftForm, LessonForm, LessonSettingsForm, MoveGatheringForm, MoveLessonForm,
-  NewGatheringForm, NewKeptThingForm, NewLessonForm, NewSeriesForm, RestoreTextForm, SeriesDetailsForm, SeriesForm,
+  NewGatheringForm, NewKeptThingForm, NewLessonForm, NewSeriesForm, RestoreTextForm, SeriesDetailsForm, SeriesForm, WorkroomForm,
 } from '#contracts/workroom.ts';
 import { partsList } from '#core/series/parts-list.ts';
 import { clockWords } from '#core/moment-words.ts';
@@ -19,6 +19,7 @@ import { restoreLessonText } from '#server/use-cases/workroom/restore-lesson-tex
 import { saveLessonDraft } from '#server/use-cases/workroom/save-lesson-draft.ts';
 import { saveLessonSettings } from '#server/use-cases/workroom/save-lesson-settings.ts';
 import { saveSeriesDetails } from '#server/use-cases/workroom/save-series-details.ts';
+import { saveWorkroom } from '#server/use-cases/workroom/save-workroom.ts';
 import { formAction } from './form-action.ts';
 
 const seriesAt = (slug: string, anchor = ''): string => `/workroom/series/${slug}${anchor}`;
@@ -29,6 +30,10 @@ const thingAt = ({ publicId }: { publicId: string }): string => `${THINGS}#thing
 const savedNow = (ctx: Context): string => `Saved ${clockWords(ctx.clock.now(), signedIn(ctx).timeZone)}`;
 
 export const workroom = {
+  saveWorkroom: formAction(WorkroomForm, async (input, ctx) => {
+    await saveWorkroom(ctx, input);
+    return { to: '/workroom/settings', said: savedNow(ctx) };
+  }),
   createSeries: formAction(NewSeriesForm, async (input, ctx) => {
     const { slug } = await createSeries(ctx, input);
     return { to: seriesAt(slug), said: 'The series is made. Nobody but you sees it yet.' };

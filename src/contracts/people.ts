@@ -50,11 +50,13 @@ export type ProveInput = z.output<typeof ProveForm>;
 const UNITS = ['cm', 'in'] as const;
 const SCHEMES = ['system', 'light', 'dark'] as const;
 
+export const timeZone = z.string({ required_error: 'The time zone is missing.', invalid_type_error: 'The time zone is missing.' }).max(64, 'There is no such time zone.').refine(isTimeZone, 'There is no such time zone. Choose one of the list.');
+
 export const AccountForm = z.object({
   name,
   units: z.enum(UNITS, { errorMap: () => ({ message: 'Choose cm or inches.' }) }),
   scheme: z.enum(SCHEMES, { errorMap: () => ({ message: 'Choose the light of the device, day or evening.' }) }),
-  timeZone: z.string({ required_error: 'The time zone is missing.', invalid_type_error: 'The time zone is missing.' }).max(64, 'There is no such time zone.').refine(isTimeZone, 'There is no such time zone. Choose one of the list.'),
+  timeZone,
 });
 export type AccountInput = z.output<typeof AccountForm>;
 

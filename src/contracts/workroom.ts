@@ -2,6 +2,7 @@
 import { z } from 'astro/zod';
 import { CRAFT_NAMES } from '#core/craft/crafts.ts';
 import type { LessonProblem } from '#core/lesson-text/problem.ts';
+import { timeZone } from './people.ts';
 
 const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
 const publicId = z.string().regex(/^[0-9a-z]{26}$/);
@@ -15,6 +16,10 @@ const maybeWords = (most: number) =>
   z.string().trim().max(most, `At most ${most.toLocaleString('en-GB')} characters work here.`).optional().transform((value) => (value === undefined || value === '' ? null : value));
 const wholeNumber = (says: string, least: number, most: number) =>
   z.string({ required_error: says }).trim().regex(/^\d{1,6}$/, says).transform(Number).refine((n) => n >= least && n <= most, says);
+
+/** `dates`: what parts that open on a date keep when the zone changes. */
+export const WorkroomForm = z.object({ name: words('The name', 120), timeZone, dates: z.enum(['moment', 'clock'], { errorMap: () => ({ message: 'Choose what the dates keep.' }) }).default('moment') });
+export type WorkroomInput = z.output<typeof WorkroomForm>;
 
 export const LEVELS = ['beginner', 'some-practice', 'sure-hand'] as const;
 

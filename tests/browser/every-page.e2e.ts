@@ -52,6 +52,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/workroom': [['ilse', '/workroom'], ['wren', '/workroom'], ['teodor', '/workroom']],
   '/workroom/money': [['ilse', '/workroom/money']],
   '/workroom/series/new': [['ilse', '/workroom/series/new']],
+  '/workroom/settings': [['ilse', '/workroom/settings']],
   '/workroom/series/bring-in': [['ilse', '/workroom/series/bring-in']],
   '/workroom/series/[slug]': [['ilse', '/workroom/series/low-tide'], ['teodor', '/workroom/series/three-knotted-cords']],
   '/workroom/series/[slug]/before': [['ilse', '/workroom/series/low-tide/before']],

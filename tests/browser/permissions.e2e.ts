@@ -117,6 +117,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/workroom/questions': [{ at: '/workroom/questions', answers: BENCH }],
   '/workroom/money': [{ at: '/workroom/money', answers: TEACHERS }],
   '/workroom/series/new': [{ at: '/workroom/series/new', answers: TEACHERS }],
+  '/workroom/settings': [{ at: '/workroom/settings', answers: TEACHERS }],
   '/workroom/series/bring-in': [{ at: '/workroom/series/bring-in', answers: TEACHERS }],
   '/workroom/series/bring-in/[folder]': [{ at: '/workroom/series/bring-in/no-such-folder', answers: '303 403 403 404 404 403 403' }],
   '/workroom/series/[slug]': [{ at: '/workroom/series/low-tide', answers: OWNER }],

@@ -91,6 +91,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/workroom/questions': 'bench',
   '/workroom/helpers': 'bench',
   '/workroom/series/new': 'teacher',
+  '/workroom/settings': 'teacher',
   '/workroom/series/bring-in': 'teacher',
   '/workroom/series/bring-in/[folder]': 'teacher',
   '/workroom/series/[slug]': 'teacher',
