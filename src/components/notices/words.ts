@@ -9,4 +9,5 @@ export const TOLD: Readonly<Record<ToldKind, { readonly flag: FlagKind; readonly
   verdict: { flag: 'on', words: 'Verdict' },
   seat: { flag: 'held', words: 'Your seat' },
   answer: { flag: 'here', words: 'Answer' },
+  folder: { flag: 'here', words: 'Series folder' },
 };
