@@ -90,7 +90,7 @@ describe('a preview', () => {
     const maud = await buildUser({ name: 'Maud Ellery', units: 'in' });
     const seat = await buildEnrolment({ seriesId: series.id, userId: maud.id });
     await MyPieceRow.create({ enrolmentId: seat.id, data: { widthMm: 300 } });
-    expect(await seenAs(own, seat.publicId, 'cm')).toEqual({ as: seat.publicId, studentName: 'Maud Ellery', loom: null, mine: { widthMm: 300 }, units: 'in' });
+    expect(await seenAs(own, seat.publicId, 'cm')).toEqual({ as: seat.publicId, studentName: 'Maud Ellery', loom: null, mine: { widthMm: 300 }, woven: { bandsDone: 0 }, units: 'in' });
     const foreign = await buildEnrolment();
     const closed = await buildEnrolment({ seriesId: series.id, state: 'closed' });
     for (const as of [foreign.publicId, closed.publicId, 'nobody', null]) expect(await seenAs(own, as, 'cm')).toMatchObject({ as: 'pattern', studentName: null });

@@ -55,4 +55,3 @@ export const migrations: readonly Migration[] = [
   addWhatToSee,
   createOwnLooms,
 ];
-import { createOwnLooms } from './0032-create-own-looms.ts';
