@@ -5,8 +5,8 @@ import { GatherSum, type GatherSumProps } from './GatherSum.tsx';
 import { KeptHere } from './KeptHere.tsx';
 
 export interface GatherBoardProps {
-  /** Public id of the seat whose ticks these are; null without one. */
-  seat: string | null;
+  /** Revision of the seat's ticks the lines were read with; null without a seat. */
+  asOf: number | null;
   series: string;
   lines: readonly ShownLine[];
   /** Where the list goes without script. */
@@ -15,16 +15,16 @@ export interface GatherBoardProps {
 }
 
 /** The list to shop by, and beside it what is still to get. */
-export function GatherBoard({ seat, ...board }: GatherBoardProps) {
-  return seat === null ? <Board {...board} ticks={null} /> : <TickedBoard {...board} seat={seat} />;
+export function GatherBoard({ asOf, ...board }: GatherBoardProps) {
+  return asOf === null ? <Board {...board} ticks={null} /> : <TickedBoard {...board} asOf={asOf} />;
 }
 
-function TickedBoard({ seat, ...board }: Omit<GatherBoardProps, 'seat'> & { seat: string }) {
-  return <Board {...board} ticks={useTicks(seat, board.series, board.lines)} />;
+function TickedBoard({ asOf, ...board }: Omit<GatherBoardProps, 'asOf'> & { asOf: number }) {
+  return <Board {...board} ticks={useTicks(board.series, asOf)} />;
 }
 
-function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'seat'> & { ticks: Ticks | null }) {
-  const had = (some: readonly ShownLine[]): number => (ticks === null ? 0 : some.filter(({ key }) => ticks.isTicked(key)).length);
+function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'asOf'> & { ticks: Ticks | null }) {
+  const had = (some: readonly ShownLine[]): number => (ticks === null ? 0 : some.filter(ticks.isTicked).length);
   const groups = ([['yarn', sum.material], ['tool', 'Tools'], ['material', 'Material']] as const).map(([kind, title]) => ({ kind, title, own: lines.filter((line) => line.kind === kind) })).filter(({ own }) => own.length > 0);
   return (
     <>
@@ -33,7 +33,7 @@ function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'se
         {ticks !== null && (
           <div className="row between">
             <p><b className="num">{had(lines)} of {lines.length} gathered</b></p>
-            <KeptHere queue={ticks.queue} />
+            <KeptHere here={ticks.here} />
           </div>
         )}
         {groups.map(({ kind, title, own }) => (

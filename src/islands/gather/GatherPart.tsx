@@ -4,7 +4,8 @@ import { GatherRows } from './GatherRows.tsx';
 import { KeptHere } from './KeptHere.tsx';
 
 interface GatherPartProps {
-  seat: string;
+  /** Revision of the seat's ticks the lines were read with. */
+  asOf: number;
   series: string;
   part: number;
   lines: readonly ShownLine[];
@@ -13,9 +14,9 @@ interface GatherPartProps {
 }
 
 /** What one part needs, beside its text. */
-export function GatherPart({ seat, series, part, lines, action }: GatherPartProps) {
-  const ticks = useTicks(seat, series, lines);
-  const had = lines.filter(({ key }) => ticks.isTicked(key)).length;
+export function GatherPart({ asOf, series, part, lines, action }: GatherPartProps) {
+  const ticks = useTicks(series, asOf);
+  const had = lines.filter(ticks.isTicked).length;
   return (
     <form method="post" action={action} aria-labelledby="gather-title">
       <input type="hidden" name="series" value={series} />
@@ -23,7 +24,7 @@ export function GatherPart({ seat, series, part, lines, action }: GatherPartProp
         <h2 className="h3" id="gather-title">Gather for Part {part}</h2>
         <span className="small quiet num">{had} of {lines.length}</span>
       </div>
-      <KeptHere queue={ticks.queue} />
+      <KeptHere here={ticks.here} />
       <div className="lined">
         <GatherRows lines={lines} ticks={ticks} />
       </div>

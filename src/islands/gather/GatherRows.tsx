@@ -25,8 +25,8 @@ function LiveRow({ line, ticks }: { line: ShownLine; ticks: Ticks }) {
       <TickRow
         name="gathered[]"
         value={line.key}
-        checked={ticks.isTicked(line.key)}
-        unsent={ticks.isUnsent(line.key)}
+        checked={ticks.isTicked(line)}
+        unsent={ticks.isUnsent(line)}
         onTick={(ticked) => ticks.tick(line, ticked)}
         what={line.name}
         yarn={line.kind === 'yarn' ? (line.colour ?? '') : undefined}

@@ -1,9 +1,11 @@
 import { useEffect, useState } from 'react';
-import { tickQueue } from '#islands/ticks/browser-queue.ts';
+import { outboxOf, personOfPage } from '#islands/keeping/outbox.ts';
+import { forgetHeard, putTick, ticksHere, type TicksHere } from '#islands/ticks/tick-outbox.ts';
 import { markStep, moveHere, stepOf, tickedNow } from './step-marks.ts';
 
 interface LiveLessonProps {
-  seat: string;
+  /** Revision of the seat's ticks the page was drawn with. */
+  asOf: number;
   series: string;
   lesson: string;
 }
@@ -12,38 +14,39 @@ interface LiveLessonProps {
  * Takes over what the page under it can do by itself: the small forms of the steps answer at once. Draws nothing but the
  * words that say where a tick is kept.
  */
-export function LiveLesson({ seat, series, lesson }: LiveLessonProps) {
+export function LiveLesson({ asOf, series, lesson }: LiveLessonProps) {
   const [words, setWords] = useState('');
   useEffect(() => {
-    const queue = tickQueue(seat);
-    for (const [id, ticked] of queue.kept()) if (id.startsWith('step ')) markStep(id.slice(5), ticked);
-    moveHere();
+    const person = personOfPage();
+    if (person === null) return;
+    const outbox = outboxOf(person);
+    const steps = [...document.querySelectorAll<HTMLFormElement>('form.step-form')].flatMap((form) => stepOf(form) ?? []);
+    const drawn = new Map(steps.map((step) => [step, tickedNow(step)]));
+    const show = (): void => {
+      const here = ticksHere(outbox.current(), series, asOf);
+      for (const [step, was] of drawn) markStep(step, here.ticked.get(`step ${lesson}:${step}`) ?? was);
+      moveHere();
+      setWords(wordsOf(here));
+      if (outbox.current().isRead) forgetHeard(outbox, series, asOf);
+    };
     const onSubmit = (event: SubmitEvent): void => {
       const step = event.target instanceof HTMLFormElement ? stepOf(event.target) : undefined;
       if (step === undefined) return;
       event.preventDefault();
-      const ticked = !tickedNow(step);
-      markStep(step, ticked);
-      moveHere();
-      queue.put({ id: `step ${step}`, body: { subject: 'step', series, lesson, item: step, ticked, changedAt: new Date().toISOString() } });
+      putTick(outbox, { subject: 'step', series, lesson, item: step, ticked: !tickedNow(step) }, asOf);
     };
-    // The queue tells of a refusal again and again; the tick is taken back once.
-    let takenBack: ReadonlySet<string> = new Set();
-    const onQueue = (): void => {
-      const { unsent, waits, refused } = queue.current();
-      const fresh = [...refused].filter((id) => id.startsWith('step ') && !takenBack.has(id)).map((id) => id.slice(5));
-      for (const step of fresh) markStep(step, !tickedNow(step));
-      takenBack = refused;
-      if (fresh.length > 0) moveHere();
-      setWords(refused.size > 0 ? 'This step was not ticked: the part is not open to you any more. Load the page again.' : unsent.size > 0 && waits !== 'nothing' ? 'Kept on this device. It goes out when there is signal.' : '');
-    };
-    const stop = queue.subscribe(onQueue);
+    const stop = outbox.subscribe(show);
     document.addEventListener('submit', onSubmit);
-    void queue.flush();
+    show();
     return () => {
       stop();
       document.removeEventListener('submit', onSubmit);
     };
-  }, [seat, series, lesson]);
+  }, [asOf, series, lesson]);
   return <p className="kept-steps small" role="status">{words}</p>;
+}
+
+function wordsOf({ refused, unsent, waits }: TicksHere): string {
+  if (refused > 0) return 'This step was not ticked: the part is not open to you any more. Load the page again.';
+  return unsent.size > 0 && waits !== 'nothing' ? 'Kept on this device. It goes out when there is signal.' : '';
 }

@@ -1,6 +1,6 @@
-import { useCallback, useEffect, useState, useSyncExternalStore } from 'react';
-import { tickQueue } from './browser-queue.ts';
-import type { QueueState, TickQueue } from './tick-queue.ts';
+import { useCallback, useEffect, useMemo, useState, useSyncExternalStore } from 'react';
+import { outboxOf, personOfPage, type Outbox, type OutboxState } from '#islands/keeping/outbox.ts';
+import { forgetHeard, putTick, ticksHere, type TicksHere } from './tick-outbox.ts';
 
 export interface TickedLine {
   readonly key: string;
@@ -9,32 +9,37 @@ export interface TickedLine {
 }
 
 export interface Ticks {
-  readonly isTicked: (key: string) => boolean;
-  readonly isUnsent: (key: string) => boolean;
+  readonly isTicked: (line: TickedLine) => boolean;
+  readonly isUnsent: (line: TickedLine) => boolean;
   readonly tick: (line: TickedLine, ticked: boolean) => void;
-  readonly queue: QueueState;
+  readonly here: TicksHere;
 }
 
-const NOTHING: QueueState = { unsent: new Set(), waits: 'nothing', refused: new Set() };
+const NOTHING: OutboxState = { isRead: false, entries: [], waits: 'nothing', refused: [] };
 const idle = (): (() => void) => () => undefined;
 
-/** The ticks of some lines of a gathering list: alive at once, kept on the device until the server has them. */
-export function useTicks(seat: string, series: string, lines: readonly TickedLine[]): Ticks {
-  const [queue, setQueue] = useState<TickQueue | null>(null);
-  const [changed, setChanged] = useState<ReadonlyMap<string, boolean>>(new Map());
+/**
+ * The ticks of some lines of a gathering list: alive at once, kept on the device until the house has them.
+ * @param asOf revision of the seat's ticks the lines were read with
+ */
+export function useTicks(series: string, asOf: number): Ticks {
+  const [outbox, setOutbox] = useState<Outbox | null>(null);
   // Only in the browser: the server has no device to keep things on.
   useEffect(() => {
-    const mine = tickQueue(seat);
-    setQueue(mine);
-    setChanged(mine.kept());
-    void mine.flush();
-  }, [seat]);
-  const state = useSyncExternalStore(queue?.subscribe ?? idle, queue?.current ?? (() => NOTHING), () => NOTHING);
+    const person = personOfPage();
+    if (person !== null) setOutbox(outboxOf(person));
+  }, []);
+  const state = useSyncExternalStore(outbox?.subscribe ?? idle, outbox?.current ?? (() => NOTHING), () => NOTHING);
+  useEffect(() => { if (outbox !== null && state.isRead) forgetHeard(outbox, series, asOf); }, [asOf, outbox, series, state.isRead]);
+  const here = useMemo(() => ticksHere(state, series, asOf), [asOf, series, state]);
   const tick = useCallback((line: TickedLine, ticked: boolean) => {
-    setChanged((before) => new Map(before).set(line.key, ticked));
-    queue?.put({ id: line.key, body: { subject: 'gather', series, items: line.items, ticked, changedAt: new Date().toISOString() } });
-  }, [queue, series]);
-  const drawn = new Map(lines.map((line) => [line.key, line.ticked]));
-  const isTicked = (key: string): boolean => (state.refused.has(key) ? drawn.get(key) : (changed.get(key) ?? drawn.get(key))) ?? false;
-  return { isTicked, isUnsent: (key) => state.unsent.has(key), tick, queue: state };
+    if (outbox !== null) putTick(outbox, { subject: 'gather', series, items: [...line.items], ticked }, asOf);
+  }, [asOf, outbox, series]);
+  return { isTicked: (line) => isTicked(line, here), isUnsent: ({ items }) => items.some((item) => here.unsent.has(`gather ${item}`)), tick, here };
+}
+
+/** A thing that several parts ask for is gathered as soon as one of its lines says so. */
+function isTicked({ items, ticked }: TickedLine, here: TicksHere): boolean {
+  const known = items.flatMap((item) => here.ticked.get(`gather ${item}`) ?? []);
+  return known.includes(true) || (known.length < items.length && ticked);
 }

@@ -11,6 +11,8 @@ import { seriesFor, type PartFor, type SeriesFor } from '#server/queries/series/
 
 export interface FollowedSeries {
   readonly series: SeriesFor;
+  /** Revision of the seat's ticks that `progress` holds at least. */
+  readonly ticksAsOf: number;
   readonly pieces: PiecesOf;
   /** In the order of `series.parts`. Without a seat nothing is ticked. */
   readonly progress: readonly PartInHand[];
@@ -21,7 +23,7 @@ export interface FollowedSeries {
 }
 
 interface FactsRow { readonly lessonId: number; readonly facts: LessonFacts }
-interface TickRow { readonly itemKey: string }
+interface TickRow { readonly itemKey: string; readonly isStep: number; readonly revision: number }
 
 /** Null when there is no such series, or when it must look as if there were none. */
 export async function followedSeries(actor: Actor | null, slug: string, now: Date): Promise<FollowedSeries | null> {
@@ -35,7 +37,7 @@ export async function followedSeries(actor: Actor | null, slug: string, now: Dat
       { replacements: [series.id], type: QueryTypes.SELECT },
     ),
     series.seat === null ? [] : sequelize.query<TickRow>(
-      `SELECT item_key AS itemKey FROM ticks WHERE enrolment_id = ? AND subject = 'step' AND is_ticked = 1`,
+      `SELECT item_key AS itemKey, subject = 'step' AND is_ticked AS isStep, revision FROM ticks WHERE enrolment_id = ?`,
       { replacements: [series.seat.enrolmentId], type: QueryTypes.SELECT },
     ),
     series.seat === null ? {} : rowCounts(series.seat.enrolmentId),
@@ -45,7 +47,8 @@ export async function followedSeries(actor: Actor | null, slug: string, now: Dat
     series,
     pieces,
     counts,
-    progress: series.parts.map((part) => partInHand(part, factsOf(part), ticks)),
+    ticksAsOf: Math.max(0, ...ticks.map(({ revision }) => revision)),
+    progress: series.parts.map((part) => partInHand(part, factsOf(part), ticks.filter(({ isStep }) => isStep === 1))),
     amountKeys: series.parts.map((part) => factsOf(part)?.amounts ?? []),
   };
 }

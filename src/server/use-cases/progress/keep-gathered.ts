@@ -2,7 +2,7 @@ import type { GatheredInput } from '#contracts/following.ts';
 import type { Context } from '#server/context.ts';
 import { authorize, found } from '#server/errors.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
-import { requireItemsOf, writeTicks } from './_write-ticks.ts';
+import { requireItemsOf, toldByPage, writeTicks } from './_write-ticks.ts';
 
 /**
  * Keeps a whole gathering list at once, as a form without JavaScript sends it: every line that she changed.
@@ -17,6 +17,6 @@ export async function keepGathered(ctx: Context, { series: slug, changes }: Gath
   const ticked = new Map(changes.flatMap(({ items, ticked: is }) => items.map((item): [string, boolean] => [item, is])));
   if (ticked.size === 0) return 0;
   await requireItemsOf(series, [...ticked.keys()]);
-  await writeTicks(seat.enrolmentId, [...ticked].map(([key, is]) => ({ subject: 'gather', key, ticked: is })), now);
+  await writeTicks(seat.enrolmentId, [...ticked].map(([key, is]) => ({ subject: 'gather', key, ticked: is })), toldByPage(now));
   return changes.length;
 }

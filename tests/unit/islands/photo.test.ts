@@ -1,77 +1,7 @@
-import { describe, expect, test, vi } from 'vitest';
+import { describe, expect, test } from 'vitest';
 import { photoFault, sentOf } from '#islands/photo/photo-rules.ts';
 import { cornerAt, cutPixels, jpegName, placeOf, turned, UNCUT } from '#islands/photo/cut.ts';
 import { emptyShowing, showingAfter, type Showing, type ShowingEvent } from '#islands/photo/showing.ts';
-import { TickQueue, type SendAnswer, type TickChange } from '#islands/ticks/tick-queue.ts';
-
-const change = (id: string, ticked = true): TickChange => ({ id, body: { ticked, changedAt: '2026-12-01T10:00:00Z' } });
-function storage(text: string | null = null) {
-  const kept = { text };
-  return { kept, read: () => kept.text, write: (next: string | null) => { kept.text = next; } };
-}
-
-describe('ticks on their way', () => {
-  test('leave the device only when the server has them', async () => {
-    const store = storage();
-    const answers: SendAnswer[] = ['later', 'taken'];
-    const queue = new TickQueue(store, () => Promise.resolve(answers.shift() ?? 'taken'));
-    queue.put(change('needle'));
-    await queue.flush();
-    expect(queue.current()).toMatchObject({ waits: 'later', unsent: new Set(['needle']) });
-    expect(store.kept.text).toContain('needle');
-    await queue.flush();
-    expect(queue.current()).toMatchObject({ waits: 'nothing', unsent: new Set() });
-    expect(store.kept.text).toBeNull();
-  });
-
-  test('a later change of the same thing takes the place of the one that waits', async () => {
-    const send = vi.fn((_change: TickChange): Promise<SendAnswer> => Promise.resolve('later'));
-    const queue = new TickQueue(storage(), send);
-    queue.put(change('needle', true));
-    await queue.flush();
-    queue.put(change('needle', false));
-    await queue.flush();
-    expect(queue.kept()).toEqual(new Map([['needle', false]]));
-  });
-
-  test('a change made while the one before is on its way is not lost', async () => {
-    let answer: (given: SendAnswer) => void = () => undefined;
-    const sent: boolean[] = [];
-    const queue = new TickQueue(storage(), ({ body }) => new Promise((resolve) => { sent.push(body.ticked); answer = resolve; }));
-    queue.put(change('needle', true));
-    queue.put(change('needle', false));
-    const done = queue.flush();
-    answer('taken');
-    await vi.waitFor(() => { expect(sent).toEqual([true, false]); });
-    answer('taken');
-    await done;
-    expect(queue.kept().size).toBe(0);
-  });
-
-  test('a change made just as a run ends is sent all the same', async () => {
-    const send = vi.fn((): Promise<SendAnswer> => Promise.resolve('taken'));
-    const queue = new TickQueue(storage(), send);
-    const first = queue.flush();
-    queue.put(change('needle'));
-    await first;
-    expect(send).toHaveBeenCalledTimes(1);
-    expect(queue.kept().size).toBe(0);
-  });
-
-  test('what the server will never take is told, and does not hold up the rest', async () => {
-    const queue = new TickQueue(storage(), ({ id }) => Promise.resolve(id === 'gone' ? 'refused' : 'taken'));
-    queue.put(change('gone'));
-    queue.put(change('needle'));
-    await queue.flush();
-    expect(queue.current()).toMatchObject({ refused: new Set(['gone']), unsent: new Set() });
-  });
-
-  test('what was kept by a page before is sent by the next; what is no tick is dropped', () => {
-    const store = storage(JSON.stringify([change('needle'), { id: 3 }, 'x', { id: 'y', body: {} }]));
-    expect(new TickQueue(store, () => Promise.resolve('later')).kept()).toEqual(new Map([['needle', true]]));
-    expect(new TickQueue(storage('{broken'), () => Promise.resolve('later')).kept().size).toBe(0);
-  });
-});
 
 describe('what is taken as a photo', () => {
   test.each([
