@@ -1,4 +1,4 @@
-import { CalendarForm, FinishForm, GatheredForm, ReadForm } from '#contracts/following.ts';
+import { CalendarForm, FinishForm, GatheredForm, ReadForm, StashForm } from '#contracts/following.ts';
 import { MyPieceForm } from '#contracts/my-piece.ts';
 import { RowsForm } from '#contracts/rows.ts';
 import { TickInput } from '#contracts/ticks.ts';
@@ -8,6 +8,7 @@ import { saveMyPiece } from '#server/use-cases/pieces/save-my-piece.ts';
 import { sayRows } from '#server/use-cases/progress/count-rows.ts';
 import { finishPart } from '#server/use-cases/progress/finish-part.ts';
 import { keepGathered } from '#server/use-cases/progress/keep-gathered.ts';
+import { keepStash } from '#server/use-cases/progress/keep-stash.ts';
 import { readAnew } from '#server/use-cases/progress/note-reading.ts';
 import { setTick } from '#server/use-cases/progress/set-tick.ts';
 import { changeTime, writeDownTime } from '#server/use-cases/progress/write-down-time.ts';
@@ -31,6 +32,7 @@ export const following = {
     return { to: `/series/${input.series}/${input.part}/loomside?step=${input.step}#rows` };
   }),
 
+<<<<<<< HEAD
   writeTime: formAction(WriteTimeForm, async (input, ctx) => {
     await writeDownTime(ctx, input);
     return { to: '/loom#time', said: 'Your time is written down.' };
@@ -39,6 +41,11 @@ export const following = {
   changeTime: formAction(ChangeTimeForm, async (input, ctx) => {
     const { isTakenOut } = await changeTime(ctx, input);
     return { to: '/loom#time', said: isTakenOut ? 'That time is taken out.' : 'That time is changed.' };
+=======
+  stash: formAction(StashForm, async (input, ctx, api) => {
+    await keepStash(ctx, input);
+    return { to: `${api.url.pathname}#to-buy`, said: 'What you have is kept, and taken off what is to buy.' };
+>>>>>>> b932cda (Tell what is still to buy of each yarn, and send the list on as text)
   }),
 
   finish: formAction(FinishForm, async (input, ctx) => {

@@ -1,5 +1,6 @@
 /** Following a series: forms that work without JavaScript. */
 import { z } from 'astro/zod';
+import { readStash } from '#core/gathering/stash.ts';
 
 const slug = z.string().regex(/^[a-z0-9-]{1,64}$/);
 const publicId = z.string().regex(/^[0-9a-z]{26}$/);
@@ -16,6 +17,19 @@ export const GatheredForm = z.object({
   changes: [...new Set(shown)].filter((line) => had.includes(line) !== gathered.includes(line)).map((line) => ({ items: line.split('.'), ticked: gathered.includes(line) })),
 }));
 export type GatheredInput = z.output<typeof GatheredForm>;
+
+/** What she has of each yarn on her list, in the order of the list. */
+export const StashForm = z.object({ series: slug, yarn: z.array(z.string().min(1).max(160)).max(60), have: z.array(z.string().max(40)).max(60) })
+  .transform(({ series, yarn, have }, ctx) => ({
+    series,
+    has: yarn.flatMap((key, index) => {
+      const read = readStash(have[index] ?? '');
+      if (read.ok) return [{ yarn: key, stash: read.stash }];
+      ctx.addIssue({ code: 'custom', path: ['have', index], message: read.reason });
+      return [];
+    }),
+  }));
+export type StashInput = z.output<typeof StashForm>;
 
 export const CalendarForm = z.object({ series: slug });
 

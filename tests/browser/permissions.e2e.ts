@@ -42,6 +42,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/payments/events': [{ at: '/api/payments/events', post: true, answers: '400' }],
   '/api/photos': [{ at: '/api/photos', post: true, answers: '401 422 422 422 422 422 422' }],
   '/api/kept-pages': [{ at: '/api/kept-pages', answers: EVERYBODY }],
+  '/series/[slug]/gather.txt': [{ at: '/series/low-tide/gather.txt', answers: EVERYBODY }],
   '/offline': [{ at: '/offline', answers: EVERYBODY }],
   '/api/photos/pieces/[...upload]': [{ at: '/api/photos/pieces', post: true, answers: '401 412 412 412 412 412 412' }],
   '/api/photos/show': [{ at: '/api/photos/show', post: true, answers: '401 422 422 422 422 422 422' }],

@@ -1,7 +1,10 @@
+import { listText } from '#core/gathering/list-text.ts';
 import type { ShownLine } from '#core/gathering/rows.ts';
+import { KeepSeries } from '#islands/keeping/KeepSeries.tsx';
 import { useTicks, type Ticks } from '#islands/ticks/use-ticks.ts';
 import { GatherRows } from './GatherRows.tsx';
 import { GatherSum, type GatherSumProps } from './GatherSum.tsx';
+import { ShareList } from './ShareList.tsx';
 import { KeptHere } from './KeptHere.tsx';
 
 export interface GatherBoardProps {
@@ -12,6 +15,10 @@ export interface GatherBoardProps {
   /** Where the list goes without script. */
   action: string;
   sum: Omit<GatherSumProps, 'left' | 'total'>;
+  /** Of the list, as its text begins. */
+  title: string;
+  /** The list as plain text. */
+  textHref: string;
 }
 
 /** The list to shop by, and beside it what is still to get. */
@@ -23,7 +30,7 @@ function TickedBoard({ asOf, ...board }: Omit<GatherBoardProps, 'asOf'> & { asOf
   return <Board {...board} ticks={useTicks(board.series, asOf)} />;
 }
 
-function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'asOf'> & { ticks: Ticks | null }) {
+function Board({ series, lines, action, sum, title, textHref, ticks }: Omit<GatherBoardProps, 'asOf'> & { ticks: Ticks | null }) {
   const had = (some: readonly ShownLine[]): number => (ticks === null ? 0 : some.filter(ticks.isTicked).length);
   const groups = ([['yarn', sum.material], ['tool', 'Tools'], ['material', 'Material']] as const).map(([kind, title]) => ({ kind, title, own: lines.filter((line) => line.kind === kind) })).filter(({ own }) => own.length > 0);
   return (
@@ -49,6 +56,10 @@ function Board({ series, lines, action, sum, ticks }: Omit<GatherBoardProps, 'as
         ))}
         {ticks !== null && <noscript><button className="btn btn-act keep-ticks" type="submit">Keep my ticks</button></noscript>}
       </form>
+      <div className="gather-more no-print">
+        <ShareList title={title} textNow={() => listText(lines, { title, material: sum.material, ...(ticks !== null && { isTicked: ticks.isTicked }) })} address={textHref} />
+        {ticks !== null && <KeepSeries series={series} />}
+      </div>
       <GatherSum {...sum} left={lines.length - had(lines)} total={lines.length} />
     </>
   );

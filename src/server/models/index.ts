@@ -33,6 +33,7 @@ export { Question } from './question.ts';
 export { QuestionAnswer } from './question-answer.ts';
 export { RefusedAddress } from './refused-address.ts';
 export { Review } from './review.ts';
+export { KeptStash } from './kept-stash.ts';
 export { RowTally } from './row-tally.ts';
 export { Series } from './series.ts';
 export { SeriesImport } from './series-import.ts';

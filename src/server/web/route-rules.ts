@@ -52,6 +52,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/series/[slug]/timetable': 'signed-in',
   '/calendar/[key].ics': 'machine',
   '/series/[slug]/gather': 'public',
+  '/series/[slug]/gather.txt': 'public',
   '/series/[slug]/piece': 'signed-in',
   '/loom': 'signed-in',
   '/notices': 'signed-in',

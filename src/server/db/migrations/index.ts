@@ -22,6 +22,7 @@ import { createKeptThings } from './0020-create-kept-things.ts';
 import { createLessonReads } from './0021-create-lesson-reads.ts';
 import { createSeriesImports } from './0022-create-series-imports.ts';
 import { mergeTicks } from './0024-merge-ticks.ts';
+import { createStashes } from './0025-create-stashes.ts';
 import { createRowTallies } from './0026-create-row-tallies.ts';
 import { createWeavingTimes } from './0027-create-weaving-times.ts';
 import { createPhotoUploads } from './0028-create-photo-uploads.ts';
@@ -51,6 +52,7 @@ export const migrations: readonly Migration[] = [
   createLessonReads,
   createSeriesImports,
   mergeTicks,
+  createStashes,
   createRowTallies,
   createWeavingTimes,
   createPhotoUploads,
