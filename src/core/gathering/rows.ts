@@ -6,6 +6,7 @@ import type { MadeFor } from '#core/craft/made-for.ts';
 import type { Yarn } from '#core/craft/piece.ts';
 import { amountToHave, materialsToHave, type UsedUp } from '#core/craft/rest/amount-for.ts';
 import { mergeLines, type GatheringLine, type MergedLine } from '#core/gathering/merge.ts';
+import { purchaseKey } from '#core/gathering/to-buy.ts';
 import { partsList } from '#core/series/parts-list.ts';
 import { amountText, formatAmount, type AmountPart } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
@@ -107,7 +108,7 @@ function rowOf(line: MergedLine, shownFor: ShownFor): ShownLine {
     ticked: line.ticked,
     colour: material?.colour,
     amount: amountIn(line, made, units),
-    also: line.kind === 'yarn' ? weightWords(line, material, units) : '',
+    also: line.kind === 'yarn' ? weightWords(line, material, shownFor) : '',
     when: partsWords(line.parts, line.untilPart),
     note: line.note ?? '',
     ...wordsFor(line, isOwnYarn(yarn, patternYarn)),
@@ -136,10 +137,12 @@ function amountIn({ amountKey, amountText: words }: MergedLine, made: MadeFor | 
   return amount.ok ? formatAmount(amount.value, units) : words;
 }
 
-function weightWords({ amountKey }: MergedLine, material: Material | undefined, units: Units): string {
+/** Balls only where the line is all there is of its yarn: two lines of one yarn are rounded up together (`to-buy.ts`). */
+function weightWords({ amountKey }: MergedLine, material: Material | undefined, { made, units }: ShownFor): string {
   if (material === undefined || material.grams === 0 || amountKey === null || amountKey.startsWith('band.')) return '';
   const weight = amountText(massOf(material.grams), units);
-  return material.balls === undefined ? weight : `${weight}, ${material.balls === 1 ? '1 ball' : `${material.balls} balls`}`;
+  const isAll = materialsOf(made).filter((one) => purchaseKey(one) === purchaseKey(material)).length === 1;
+  return material.balls === undefined || !isAll ? weight : `${weight}, ${material.balls === 1 ? '1 ball' : `${material.balls} balls`}`;
 }
 
 /** `Parts 2, 3 and 5 to 7, kept until Part 9` */

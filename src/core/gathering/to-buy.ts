@@ -25,7 +25,8 @@ export interface YarnToBuy {
 
 const LONGEST_KEY = 160;
 
-function keyOf({ label, name, colour, yarn }: Material): string {
+/** What makes two materials one to buy. */
+export function purchaseKey({ label, name, colour, yarn }: Material): string {
   const ball = yarn?.ball;
   return [label ?? name, colour ?? '', ball === undefined ? '' : `${String(ball.metres)}/${String(ball.grams)}`].join('|').toLowerCase().slice(0, LONGEST_KEY);
 }
@@ -35,7 +36,7 @@ export function yarnsToBuy(materials: readonly Material[], stashes: ReadonlyMap<
   const together = new Map<string, Material[]>();
   for (const material of materials) {
     if (material.lengthMm === 0 || material.grams === 0) continue;
-    const key = keyOf(material);
+    const key = purchaseKey(material);
     together.set(key, [...(together.get(key) ?? []), material]);
   }
   return [...together].flatMap(([key, same]) => {
