@@ -14,7 +14,7 @@ export interface NewEntry {
   /** Endpoint that takes it by POST. */
   readonly address: string;
   readonly body: EntryBody;
-  /** The house's answer stays here, for pages that were made before it, until it is forgotten. */
+  /** The house's answer stays here, for pages that were made before it, until another entry takes its place. */
   readonly keepsAnswer?: boolean;
 }
 

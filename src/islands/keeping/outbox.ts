@@ -82,13 +82,6 @@ export class Outbox {
     return this.sending;
   }
 
-  /** Takes answers away that no page needs any more. */
-  async forget(sequences: readonly number[]): Promise<void> {
-    if (sequences.length === 0) return;
-    this.tell({ entries: this.state.entries.filter(({ sequence }) => !sequences.includes(sequence)) });
-    await (await this.store).remove(sequences);
-  }
-
   /** For signing out: nothing of this person stays, sent or not. */
   async empty(): Promise<void> {
     this.tell({ entries: [], refused: [], waits: 'nothing' });

@@ -1,6 +1,6 @@
 import { useEffect, useState } from 'react';
 import { outboxOf, personOfPage } from '#islands/keeping/outbox.ts';
-import { forgetHeard, putTick, ticksHere, type TicksHere } from '#islands/ticks/tick-outbox.ts';
+import { putTick, ticksHere, type TicksHere } from '#islands/ticks/tick-outbox.ts';
 import { markStep, moveHere, stepOf, tickedNow } from './step-marks.ts';
 
 interface LiveLessonProps {
@@ -27,7 +27,6 @@ export function LiveLesson({ asOf, series, lesson }: LiveLessonProps) {
       for (const [step, was] of drawn) markStep(step, here.ticked.get(`step ${lesson}:${step}`) ?? was);
       moveHere();
       setWords(wordsOf(here));
-      if (outbox.current().isRead) forgetHeard(outbox, series, asOf);
     };
     const onSubmit = (event: SubmitEvent): void => {
       const step = event.target instanceof HTMLFormElement ? stepOf(event.target) : undefined;

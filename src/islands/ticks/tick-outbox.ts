@@ -38,14 +38,11 @@ export function ticksHere({ entries, waits, refused }: OutboxState, series: stri
   };
 }
 
-/** Tells the house of a tick, with the newest revision this device knows. */
+/**
+ * Tells the house of a tick, with the newest revision this device knows. The answer stays until the thing is ticked again:
+ * a page kept on the device may be older than it.
+ */
 export function putTick(outbox: Outbox, told: Told, asOf: number): void {
   const heard = outbox.current().entries.filter((entry) => isOf(entry, told.series) && !isWaiting(entry)).map((entry) => answerOf(entry).revision);
   void outbox.put({ kind: KIND, name: nameOf(told), address: '/api/ticks', body: { json: { ...told, seen: Math.max(asOf, ...heard) } }, keepsAnswer: true });
-}
-
-/** A page drawn by the house just now needs no answer that it holds itself. */
-export function forgetHeard(outbox: Outbox, series: string, asOf: number): void {
-  const old = outbox.current().entries.filter((entry) => isOf(entry, series) && !isWaiting(entry) && answerOf(entry).revision <= asOf);
-  if (old.length > 0) void outbox.forget(old.map(({ sequence }) => sequence));
 }

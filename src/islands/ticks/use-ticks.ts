@@ -1,6 +1,6 @@
 import { useCallback, useEffect, useMemo, useState, useSyncExternalStore } from 'react';
 import { outboxOf, personOfPage, type Outbox, type OutboxState } from '#islands/keeping/outbox.ts';
-import { forgetHeard, putTick, ticksHere, type TicksHere } from './tick-outbox.ts';
+import { putTick, ticksHere, type TicksHere } from './tick-outbox.ts';
 
 export interface TickedLine {
   readonly key: string;
@@ -30,7 +30,6 @@ export function useTicks(series: string, asOf: number): Ticks {
     if (person !== null) setOutbox(outboxOf(person));
   }, []);
   const state = useSyncExternalStore(outbox?.subscribe ?? idle, outbox?.current ?? (() => NOTHING), () => NOTHING);
-  useEffect(() => { if (outbox !== null && state.isRead) forgetHeard(outbox, series, asOf); }, [asOf, outbox, series, state.isRead]);
   const here = useMemo(() => ticksHere(state, series, asOf), [asOf, series, state]);
   const tick = useCallback((line: TickedLine, ticked: boolean) => {
     if (outbox !== null) putTick(outbox, { subject: 'gather', series, items: [...line.items], ticked }, asOf);
