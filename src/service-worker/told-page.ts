@@ -6,10 +6,10 @@ export function asOfWords(keptAt: Date, now: Date, timeZone: string): string {
   return dayWords(keptAt, timeZone) === dayWords(now, timeZone) ? clockWords(keptAt, timeZone) : momentWords(keptAt, timeZone);
 }
 
-/** The page with one plain line above its work. */
+/** The page with one plain line above its work; before it, as the loom side lays out what is in it. */
 export function withAsOf(html: string, asOf: string): string {
   const line = `<p class="kept-as-of" role="status">You are without a connection: this is as of ${asOf}. <a href="">Try again</a></p>`;
-  return html.replace(/<main\b[^>]*>/, (main) => `${main}${line}`);
+  return html.replace(/<main\b/, (main) => line + main);
 }
 
 export interface KeptPage {

@@ -55,7 +55,7 @@ test('a list is ticked on two devices without a connection, and nothing is lost'
   await laptop.context().close();
 
   await page.goto('/loom');
-  await page.getByText('Your menu,').click();
+  await page.locator('summary', { hasText: 'Your menu' }).click();
   await page.getByRole('button', { name: 'Sign out' }).click();
   await expect(page).toHaveURL(/\/sign-in$/);
   await expect.poll(() => keptPages(page)).toEqual([]);

@@ -4,7 +4,7 @@ import { asOfWords, titleIn, withAsOf, withKeptList } from '../../../src/service
 
 describe('a kept page', () => {
   test('says above its work of when it is', () => {
-    expect(withAsOf('<main id="main" tabindex="-1"><h1>', '14:05')).toBe('<main id="main" tabindex="-1"><p class="kept-as-of" role="status">You are without a connection: this is as of 14:05. <a href="">Try again</a></p><h1>');
+    expect(withAsOf('<main id="main" tabindex="-1"><h1>', '14:05')).toBe('<p class="kept-as-of" role="status">You are without a connection: this is as of 14:05. <a href="">Try again</a></p><main id="main" tabindex="-1"><h1>');
   });
 
   test('tells the day where it is another one, by the clock of the device', () => {
