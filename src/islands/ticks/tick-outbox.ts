@@ -1,6 +1,7 @@
 /** Ticks in the outbox: how they are put in, and what they make of a page that was drawn before them. Knows no screen. */
 import type { TickInput, TicksTaken } from '#contracts/ticks.ts';
-import { isWaiting, type Entry, type Outbox, type OutboxState } from '#islands/keeping/outbox.ts';
+import type { Entry } from '#islands/keeping/outbox-store.ts';
+import { isWaiting, type Outbox, type OutboxState } from '#islands/keeping/outbox.ts';
 
 const KIND = 'tick';
 
