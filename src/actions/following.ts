@@ -32,7 +32,6 @@ export const following = {
     return { to: `/series/${input.series}/${input.part}/loomside?step=${input.step}#rows` };
   }),
 
-<<<<<<< HEAD
   writeTime: formAction(WriteTimeForm, async (input, ctx) => {
     await writeDownTime(ctx, input);
     return { to: '/loom#time', said: 'Your time is written down.' };
@@ -41,11 +40,11 @@ export const following = {
   changeTime: formAction(ChangeTimeForm, async (input, ctx) => {
     const { isTakenOut } = await changeTime(ctx, input);
     return { to: '/loom#time', said: isTakenOut ? 'That time is taken out.' : 'That time is changed.' };
-=======
+  }),
+
   stash: formAction(StashForm, async (input, ctx, api) => {
     await keepStash(ctx, input);
     return { to: `${api.url.pathname}#to-buy`, said: 'What you have is kept, and taken off what is to buy.' };
->>>>>>> b932cda (Tell what is still to buy of each yarn, and send the list on as text)
   }),
 
   finish: formAction(FinishForm, async (input, ctx) => {
