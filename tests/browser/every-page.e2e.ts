@@ -47,6 +47,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/sign-in': [['visitor', '/sign-in']],
   '/sign-up': [['visitor', '/sign-up']],
   '/teachers/[handle]': [['visitor', '/teachers/saltmarsh']],
+  '/techniques/[name]': [['visitor', '/techniques/soumak'], ['visitor', '/techniques/dovetail']],
   '/series/[slug]/[part]/loomside': [['maud', '/series/low-tide/2/loomside'], ['visitor', '/series/low-tide/1/loomside']],
   '/series/[slug]/piece': [['maud', '/series/low-tide/piece']],
   '/workroom': [['ilse', '/workroom'], ['wren', '/workroom'], ['teodor', '/workroom']],
@@ -80,7 +81,10 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 };
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
-const NO_PAGES = new Set(['/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics']);
+const NO_PAGES = new Set([
+  '/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics',
+  '/robots.txt', '/sitemap.xml', '/series/feed.atom', '/teachers/[handle]/feed.atom',
+]);
 
 test('every page of the program is looked at', () => {
   const patterns = Object.keys(ROUTE_RULES).filter((pattern) => !NO_PAGES.has(pattern) && !pattern.startsWith('/api/'));

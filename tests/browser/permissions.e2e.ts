@@ -81,6 +81,9 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/prove': [{ at: '/prove', answers: SIGNED_IN }],
   '/reckoner': [{ at: '/reckoner', answers: EVERYBODY }],
   '/refused': [{ at: '/refused', answers: '404' }],
+  '/robots.txt': [{ at: '/robots.txt', answers: EVERYBODY }],
+  '/sitemap.xml': [{ at: '/sitemap.xml', answers: EVERYBODY }],
+  '/series/feed.atom': [{ at: '/series/feed.atom', answers: EVERYBODY }],
   '/series': [{ at: '/series', answers: EVERYBODY }],
   '/series/[slug]': [
     { at: '/series/low-tide', answers: EVERYBODY },
@@ -105,6 +108,8 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/sign-out': [{ at: '/sign-out', answers: '303' }],
   '/sign-up': [{ at: '/sign-up', answers: AT_THE_DOOR }],
   '/teachers/[handle]': [{ at: '/teachers/saltmarsh', answers: EVERYBODY }, { at: '/teachers/nobody', answers: '404' }],
+  '/teachers/[handle]/feed.atom': [{ at: '/teachers/saltmarsh/feed.atom', answers: EVERYBODY }, { at: '/teachers/nobody/feed.atom', answers: '404' }],
+  '/techniques/[name]': [{ at: '/techniques/soumak', answers: EVERYBODY }, { at: '/techniques/nothing-like-it', answers: '404' }],
   '/api/workroom/captions': [{ at: '/api/workroom/captions', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/lesson-draft': [{ at: '/api/workroom/lesson-draft', post: true, answers: '401 403 403 422 422 403 403' }],
   '/api/workroom/piece-draft': [{ at: '/api/workroom/piece-draft', post: true, answers: '401 403 403 422 422 403 403' }],

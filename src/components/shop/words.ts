@@ -7,7 +7,8 @@ import { likelyHours } from '#core/series/hours-words.ts';
 import { amountText } from '#core/units/format-amount.ts';
 import type { Units } from '#core/units/units.ts';
 import { LEVEL_WORDS } from '#components/series/words.ts';
-import { HOURS, LEVELS, LOOMS, PRICES } from '#contracts/shop.ts';
+import { HOURS, LEVELS, LOOMS, PRICES, type ShopWish, type ShopWishes } from '#contracts/shop.ts';
+import type { NamedLoom } from '#core/craft/my-piece/own-loom.ts';
 import type { ShopChoices, ShopSeries } from '#server/queries/shop/shop-series.ts';
 
 /** `Frame loom from 45 cm`. */
@@ -34,18 +35,42 @@ export interface Choice { readonly value: string; readonly label: string }
 
 const any = (label: string): Choice => ({ value: '', label });
 
-/** The choices of each filter; what no open series has is not offered, but for what was chosen already. */
-export function choicesOf(choices: ShopChoices, chosen: { readonly craft?: string | undefined; readonly technique?: string | undefined }): Record<'craft' | 'technique' | 'loom' | 'hours' | 'level' | 'price', readonly Choice[]> {
+type Chooser = 'craft' | 'technique' | 'loom' | 'hours' | 'level' | 'price' | 'free' | 'sort';
+
+/**
+ * The choices of each filter; what no open series has is not offered, but for what was chosen already.
+ * `looms` are a signed-in person's own, offered by their names before the usual widths.
+ */
+export function choicesOf(choices: ShopChoices, chosen: ShopWishes, { looms, units }: { readonly looms: readonly NamedLoom[]; readonly units: Units }): Record<Chooser, readonly Choice[]> {
   const techniques = chosen.technique === undefined || choices.techniques.includes(chosen.technique) ? choices.techniques : [...choices.techniques, chosen.technique];
   return {
     craft: [any('Any craft'), ...CRAFT_NAMES.filter((value) => choices.crafts.includes(value) || value === chosen.craft).map((value) => ({ value, label: CRAFTS[value].words.label }))],
     technique: [any('Any'), ...techniques.map((value) => ({ value, label: value }))],
-    loom: [any('Any loom'), ...LOOMS.map((value) => ({ value, label: value === 'none' ? 'No loom' : `${value}\u00a0cm inside` }))],
+    loom: loomChoices(chosen.loom, looms, units),
     hours: [any('Any'), ...HOURS.map((value) => ({ value, label: `Up to ${value}` }))],
     level: [any('Any level'), ...LEVELS.map((value) => ({ value, label: LEVEL_WORDS[value] }))],
     price: [any('Any price'), ...PRICES.map((value) => ({ value, label: priceChoice(value, choices.currency) }))],
+    free: [any('All'), { value: 'part', label: 'A part is free to read' }],
+    sort: [any((chosen.q ?? '') === '' ? 'Newest' : 'Nearest'), ...((chosen.q ?? '') === '' ? [] : [{ value: 'newest', label: 'Newest' }]), { value: 'title', label: 'By title' }, { value: 'hours', label: 'Shortest' }],
   };
 }
+
+const insideWords = (widthCm: number, units: Units): string => `${amountText(lengthOf(widthCm * 10, 'size'), units)} inside`;
+
+/** Two looms of one width are one choice; a width that only the address names is offered too. */
+function loomChoices(chosen: string | undefined, looms: readonly NamedLoom[], units: Units): readonly Choice[] {
+  const widthOf = ({ loom }: NamedLoom): string => String(Math.round(loom.insideWidthMm) / 10);
+  const widths = [...new Set(looms.map(widthOf))];
+  const own = widths.map((value) => ({ value, label: `${looms.filter((loom) => widthOf(loom) === value).map(({ name }) => name).join(', ')}: ${insideWords(Number(value), units)}` }));
+  const usual = LOOMS.filter((value) => !widths.includes(value)).map((value) => ({ value, label: value === 'none' ? 'No loom' : insideWords(Number(value), units) }));
+  const known = [any('Any loom'), ...own, ...usual];
+  return chosen === undefined || known.some(({ value }) => value === chosen) ? known : [...known, { value: chosen, label: insideWords(Number(chosen), units) }];
+}
+
+/** What giving up one wish is called, after `without`. */
+export const WISH_WORDS = {
+  q: 'the words', craft: 'the craft', technique: 'the technique', loom: 'your loom', hours: 'the hours', level: 'the level', price: 'the price', free: 'a part that is free to read',
+} as const satisfies Record<ShopWish, string>;
 
 function priceChoice(value: string, currency: string | null): string {
   if (value === '0') return 'Free';

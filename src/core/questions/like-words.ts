@@ -13,6 +13,8 @@ const COMMON = new Set((
 const SHORTEST = 3;
 const LONGEST = 40;
 const MOST_WORDS = 12;
+/** Whether a word in small letters stands in every sentence. */
+export const isCommonWord = (word: string): boolean => COMMON.has(word);
 const lengthOf = (word: string): number => [...word].length;
 
 /** The stems of the words in `text` that tell what is asked, each once, at most twelve. */
@@ -22,7 +24,8 @@ export function stemsIn(text: string): string[] {
   return [...new Set(stems)].slice(0, MOST_WORDS);
 }
 
-function stemOf(word: string): string {
+/** The beginning of a word in small letters, without the commonest endings. */
+export function stemOf(word: string): string {
   const stem = word.replace(/(?:ings?|ed|es|s|e)$/u, '');
   return lengthOf(stem) >= SHORTEST ? stem : word;
 }

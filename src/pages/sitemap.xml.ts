@@ -1,0 +1,15 @@
+import type { APIRoute } from 'astro';
+import { getCollection } from 'astro:content';
+import { openParts, openSeries } from '#server/queries/shop/open-series.ts';
+import { answering } from '#server/web/respond.ts';
+import { placesOf, sitemap } from '#server/web/sitemap.ts';
+import { sendDocument } from '#server/web/xml.ts';
+
+const MOST = 20_000;
+
+export const GET: APIRoute = ({ request, locals: { ctx } }) =>
+  answering(ctx.requestId, async () => {
+    const [series, parts, handbook] = [await openSeries({ limit: MOST }), await openParts(MOST), await getCollection('handbook')];
+    const own = ['/', '/series', '/handbook', '/reckoner', ...handbook.map(({ id }) => `/handbook/${id}`).toSorted()].map((path) => ({ path }));
+    return sendDocument(request, sitemap([...own, ...placesOf(series, parts)]), 'application/xml; charset=utf-8');
+  });
