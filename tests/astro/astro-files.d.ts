@@ -7,7 +7,7 @@ declare module '*.astro' {
 // As much of jsdom as reads a drawn page; it comes without types.
 declare module 'jsdom' {
   export class JSDOM {
-    constructor(html: string);
+    constructor(text: string, options?: { readonly contentType: 'application/xml' });
     readonly window: { readonly document: Document };
   }
 }

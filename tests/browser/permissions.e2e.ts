@@ -104,6 +104,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/series/[slug]/gather': [{ at: '/series/low-tide/gather', answers: EVERYBODY }],
   '/series/[slug]/piece': [{ at: '/series/low-tide/piece', answers: SEAT }],
   '/series/[slug]/seat': [{ at: '/series/low-tide/seat', answers: SEAT }],
+  '/series/[slug]/share.png': [{ at: '/series/low-tide/share.png', answers: EVERYBODY }, { at: '/series/nothing/share.png', answers: '404' }],
   '/sign-in': [{ at: '/sign-in', answers: AT_THE_DOOR }],
   '/sign-out': [{ at: '/sign-out', answers: '303' }],
   '/sign-up': [{ at: '/sign-up', answers: AT_THE_DOOR }],

@@ -5,7 +5,8 @@
  */
 import type { Scene } from '#core/captions/storyboard.ts';
 import { drawCloth } from '#core/craft/cloth/draw-cloth.ts';
-import { escapeWords, num } from '#core/craft/cloth/markup.ts';
+import { drawnInto, fitInto, type Box } from '#core/craft/cloth/fit-into.ts';
+import { escapeWords } from '#core/craft/cloth/markup.ts';
 import { clothOf } from '#core/craft/cloth-of.ts';
 import { drawFigure } from '#core/craft/figures/draw-figure.ts';
 import type { AnyFigureInput } from '#core/craft/figures/figures.ts';
@@ -17,13 +18,6 @@ const SHEET = '#f0f3f2';
 const INK = '#111e33';
 const BEAM = '#203d66';
 const SERIF = "Lora,Georgia,'Liberation Serif','DejaVu Serif',serif";
-
-interface Box {
-  readonly x: number;
-  readonly y: number;
-  readonly width: number;
-  readonly height: number;
-}
 
 /** Where the picture stands: below the title, above the captions. */
 const ROOM: Box = { x: 40, y: 74, width: 880, height: 362 };
@@ -57,25 +51,5 @@ function warpEnds(): string {
 
 function growing(as: 'loom' | 'hanging', progress: number, input: AnyFigureInput): string {
   const piece = clothOf(input.piece, input.plan, '');
-  const draw = (width: number): string => drawCloth(piece, { id: 'cloth', as, width, woven: progress, decorative: true });
-  /* Drawn again at the size it is shown at: threads scaled afterwards would blur into bands. */
-  const { width, height } = sizeOf(draw(TRIAL_WIDTH));
-  return draw(Math.floor(width * Math.min(ROOM.width / width, ROOM.height / height)));
-}
-
-const TRIAL_WIDTH = 300;
-
-function sizeOf(svg: string): { width: number; height: number } {
-  const [, width = '1', height = '1'] = / width="([\d.]+)" height="([\d.]+)"/.exec(svg) ?? [];
-  return { width: Number(width), height: Number(height) };
-}
-
-/** Our own drawing as a part of a larger one: as large as fits, in the middle. */
-function fitInto(svg: string, room: Box): string {
-  const { width, height } = sizeOf(svg);
-  const scale = Math.min(room.width / width, room.height / height);
-  const w = width * scale;
-  const h = height * scale;
-  const place = ` x="${num(room.x + (room.width - w) / 2)}" y="${num(room.y + (room.height - h) / 2)}" width="${num(w)}" height="${num(h)}"`;
-  return svg.replace(/ width="[\d.]+" height="[\d.]+"/, place);
+  return drawnInto(ROOM, (width) => drawCloth(piece, { id: 'cloth', as, width, woven: progress, decorative: true }));
 }

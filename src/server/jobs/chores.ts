@@ -6,6 +6,7 @@ import { tellOpenings } from '#server/use-cases/openings/tell-openings.ts';
 import { forgetOldLinks } from '#server/use-cases/people/forget-old-links.ts';
 import { lookAfterPhotoUploads } from '#server/use-cases/photos/look-after-photo-uploads.ts';
 import { forgetTakenOutWords } from '#server/use-cases/questions/forget-taken-out-words.ts';
+import { drawSharePictures } from '#server/use-cases/shop/draw-share-pictures.ts';
 import { lookAfterUploads } from '#server/use-cases/videos/look-after-uploads.ts';
 import { forgetOldCounters } from '#server/web/rate-limit.ts';
 
@@ -15,6 +16,7 @@ const MINUTE = 60;
 
 export const CHORES: WorkerOptions['chores'] = [
   { everySeconds: MINUTE, run: tellOpenings },
+  { everySeconds: MINUTE, run: drawSharePictures },
   { everySeconds: FIVE_MINUTES, run: lookAtOldOrders },
   { everySeconds: FIVE_MINUTES, run: lookAfterUploads },
   { everySeconds: FIVE_MINUTES, run: lookAfterPhotoUploads },

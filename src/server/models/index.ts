@@ -39,6 +39,7 @@ export { Series } from './series.ts';
 export { SeriesImport } from './series-import.ts';
 export { SeriesMedia } from './series-media.ts';
 export { Session } from './session.ts';
+export { SharePicture } from './share-picture.ts';
 export { StockPhrase } from './stock-phrase.ts';
 export { Tick } from './tick.ts';
 export { User } from './user.ts';

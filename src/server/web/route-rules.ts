@@ -23,6 +23,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/series': 'public',
   '/series/feed.atom': 'machine',
   '/series/[slug]': 'public',
+  '/series/[slug]/share.png': 'machine',
   '/series/[slug]/seat': 'signed-in',
   '/teachers/[handle]': 'public',
   '/teachers/[handle]/feed.atom': 'machine',

@@ -15,8 +15,9 @@ const LEVELS = { beginner: 'Beginner', 'some-practice': 'Intermediate', 'sure-ha
 /** `PT10H30M` (ISO 8601). */
 const duration = (minutes: number): string => `PT${Math.floor(minutes / 60)}H${minutes % 60}M`;
 
-/** @param hours of likely work; null while nothing is planned: then the length of the parts stands for it */
-export function courseOf(series: SeriesFor, { hours, picture }: { readonly hours: number | null; readonly picture: string | null }): Thing {
+/** @param facts `hours` of likely work, null while nothing is planned: then the length of the parts stands for it; `picture` an absolute address */
+export function courseOf(series: SeriesFor, facts: { readonly hours: number | null; readonly picture: string | null }): Thing {
+  const { hours, picture } = facts;
   const { slug, title, summary, level, techniques, parts, workroom } = series;
   const minutes = hours === null ? parts.reduce((sum, part) => sum + part.minutes, 0) : Math.round(hours * 60);
   const teacher = { '@type': 'Person', name: workroom.teacherName, url: publicAddress(`/teachers/${workroom.handle}`) };
@@ -28,7 +29,7 @@ export function courseOf(series: SeriesFor, { hours, picture }: { readonly hours
     description: summary === '' ? title : summary,
     url: publicAddress(`/series/${slug}`),
     inLanguage: 'en',
-    ...(picture !== null && { image: publicAddress(picture) }),
+    ...(picture !== null && { image: picture }),
     educationalLevel: LEVELS[level],
     ...(techniques.length > 0 && { teaches: techniques }),
     provider: { '@type': 'Organization', name: workroom.name, url: publicAddress(`/teachers/${workroom.handle}`) },

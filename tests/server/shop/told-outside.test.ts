@@ -19,10 +19,7 @@ const ATOM = 'http://www.w3.org/2005/Atom';
 /** RFC 3339, as RFC 4287 section 3.3 asks for it: capital T, and Z or an offset. */
 const DATE = /^\d{4}-\d\d-\d\dT\d\d:\d\d:\d\d(?:\.\d+)?(?:Z|[+-]\d\d:\d\d)$/;
 
-const xml = (text: string): Document => {
-  const { DOMParser } = new JSDOM().window;
-  return new DOMParser().parseFromString(text, 'application/xml');
-};
+const xml = (text: string): Document => new JSDOM(text, { contentType: 'application/xml' }).window.document;
 const children = (of: Element, name: string): Element[] => [...of.children].filter((child) => child.localName === name && child.namespaceURI === ATOM);
 const textOf = (of: Element, name: string): string => children(of, name)[0]?.textContent ?? '';
 const links = (of: Element, rel: string): (string | null)[] => children(of, 'link').filter((link) => link.getAttribute('rel') === rel).map((link) => link.getAttribute('href'));

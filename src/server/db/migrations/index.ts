@@ -27,6 +27,7 @@ import { createRowTallies } from './0026-create-row-tallies.ts';
 import { createWeavingTimes } from './0027-create-weaving-times.ts';
 import { createPhotoUploads } from './0028-create-photo-uploads.ts';
 import { addWhatToSee } from './0029-add-what-to-see.ts';
+import { createSharePictures } from './0030-create-share-pictures.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
 
 export const migrations: readonly Migration[] = [
@@ -57,5 +58,6 @@ export const migrations: readonly Migration[] = [
   createWeavingTimes,
   createPhotoUploads,
   addWhatToSee,
+  createSharePictures,
   createOwnLooms,
 ];
