@@ -21,6 +21,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/account/looms': [['maud', '/account/looms']],
   '/confirm/[token]': [['visitor', '/confirm/x']],
   '/forgotten': [['visitor', '/forgotten']],
+  '/gifts': [['visitor', '/gifts?series=low-tide&to=Amara&from=Maud&words=For+the+long+evenings']],
   '/handbook': [['visitor', '/handbook']],
   '/handbook/[...slug]': [['visitor', '/handbook/tabby'], ['visitor', '/handbook/yarn-counts']],
   '/loom': [['maud', '/loom'], ['jonas', '/loom'], ['amara', '/loom']],

@@ -54,6 +54,7 @@ const ROUTES: Readonly<Record<string, readonly Line[]>> = {
   '/api/videos/[...upload]': [{ at: '/api/videos', post: true, answers: '401 403 403 412 412 403 403' }],
   '/confirm/[token]': [{ at: '/confirm/nothing', answers: '410' }],
   '/forgotten': [{ at: '/forgotten', answers: EVERYBODY }],
+  '/gifts': [{ at: '/gifts', answers: EVERYBODY }],
   '/handbook': [{ at: '/handbook', answers: EVERYBODY }],
   '/handbook/[...slug]': [{ at: '/handbook/tabby', answers: EVERYBODY }, { at: '/handbook/nothing', answers: '404' }],
   '/leave/[key]': [{ at: `/leave/${'0'.repeat(26)}-${'0'.repeat(26)}-notices-${'A'.repeat(43)}`, answers: '404' }, { at: '/leave/nothing', answers: '404' }],

@@ -3,7 +3,7 @@ import { publicAddress } from '#server/web/public-address.ts';
 
 /** Pages of one person, doors, and the shop's endless ways of asking for the same series. */
 const LEAVE_ALONE = [
-  '/account', '/api/', '/calendar/', '/confirm/', '/forgotten', '/helping/', '/leave/', '/loom', '/new-password/', '/notices', '/office', '/prove', '/refused',
+  '/account', '/api/', '/calendar/', '/confirm/', '/forgotten', '/gifts?', '/helping/', '/leave/', '/loom', '/new-password/', '/notices', '/office', '/prove', '/refused',
   '/series?', '/sign-in', '/sign-out', '/sign-up', '/workroom', '/_actions/',
 ];
 

@@ -18,6 +18,7 @@ export const ROUTE_RULES: Readonly<Record<string, RouteRule>> = {
   '/handbook': 'public',
   '/handbook/[...slug]': 'public',
   '/': 'public',
+  '/gifts': 'public',
   '/robots.txt': 'machine',
   '/sitemap.xml': 'machine',
   '/series': 'public',

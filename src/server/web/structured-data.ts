@@ -6,7 +6,7 @@ import type { SeriesFor } from '#server/queries/series/series-for.ts';
 import type { TeacherPage } from '#server/queries/shop/teacher-page.ts';
 import { publicAddress } from '#server/web/public-address.ts';
 
-type Thing = Readonly<Record<string, unknown>>;
+export type Thing = Readonly<Record<string, unknown>>;
 
 const CONTEXT = 'https://schema.org';
 /** In the words of the dictionary of levels that schema.org's examples use. */
@@ -60,6 +60,3 @@ export function personOf({ handle, teacherName, workroomName, about }: TeacherPa
 export function crumbsOf(way: readonly { readonly path: string; readonly name: string }[]): Thing {
   return { '@context': CONTEXT, '@type': 'BreadcrumbList', itemListElement: way.map(({ path, name }, index) => ({ '@type': 'ListItem', position: index + 1, name, item: publicAddress(path) })) };
 }
-
-/** As it may stand in a page: nothing a teacher wrote can end the element it stands in. */
-export const jsonForPage = (thing: Thing): string => JSON.stringify(thing).replace(/[<>&\u2028\u2029]/g, (sign) => `\\u${sign.charCodeAt(0).toString(16).padStart(4, '0')}`);

@@ -2,7 +2,6 @@
 import { createHash } from 'node:crypto';
 
 /* Signs that XML 1.0 (section 2.2) knows no way to write, and halves of surrogate pairs. */
-// eslint-disable-next-line no-control-regex -- these are what is looked for
 const UNWRITABLE = /[\u0000-\u0008\u000b\u000c\u000e-\u001f\ufffe\uffff]|[\ud800-\udbff](?![\udc00-\udfff])|(?<![\ud800-\udbff])[\udc00-\udfff]/g;
 
 /** Words as they may stand in an element or an attribute. */

@@ -103,6 +103,12 @@ export async function workroomSeries(workroomId: number): Promise<readonly ShopS
   return present(rows);
 }
 
+/** One open series. @returns null for a draft or none */
+export async function oneSeries(slug: string): Promise<ShopSeries | null> {
+  const rows = await sequelize.query<Row>(`SELECT ${COLUMNS}${OPEN} AND s.slug = ?`, { replacements: [slug], type: QueryTypes.SELECT });
+  return (await present(rows))[0] ?? null;
+}
+
 /** All open series that name one of `techniques`, which are written as their teachers write them; there is at least one. */
 export async function seriesTeaching(techniques: readonly string[]): Promise<readonly ShopSeries[]> {
   const anyOf = techniques.map(() => 'JSON_CONTAINS(s.techniques, JSON_QUOTE(?))').join(' OR ');
