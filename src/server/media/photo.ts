@@ -10,7 +10,7 @@ import sharp from 'sharp';
 import type { MediaFile, MediaFiles } from '#contracts/media.ts';
 import { PHOTO_EMPTY, PHOTO_KINDS_WORDS, PHOTO_LIMITS } from '#core/photo/limits.ts';
 import { AppError } from '#server/errors.ts';
-import { readOnlyPhotos } from '#server/media/decoders.ts';
+import { readOnlyPhotos, withOnlyPhotos } from '#server/media/decoders.ts';
 import type { MediaStore } from '#server/media/store.ts';
 
 readOnlyPhotos();
@@ -50,7 +50,11 @@ async function kindOf(path: string): Promise<'jpeg' | 'png' | 'webp' | 'avif' | 
  * Reads the photo at `path` and puts its renditions into the store under `folder`. The file at `path` is left alone.
  * @throws UNSUPPORTED when it is no photo; TOO_LARGE by pixels or sides. The sentence says what works.
  */
-export async function takePhoto(store: MediaStore, path: string, folder: string): Promise<ReadPhoto> {
+export function takePhoto(store: MediaStore, path: string, folder: string): Promise<ReadPhoto> {
+  return withOnlyPhotos(() => takeAlone(store, path, folder));
+}
+
+async function takeAlone(store: MediaStore, path: string, folder: string): Promise<ReadPhoto> {
   if ((await stat(path)).size === 0) throw new AppError('UNSUPPORTED', { says: PHOTO_EMPTY });
   const kind = await kindOf(path);
   if (kind === 'heic') throw new AppError('UNSUPPORTED', { says: 'This photo is in a form only some phones read. Send it as JPEG: in the camera settings choose the most compatible form, or take a picture of the picture.' });

@@ -4,6 +4,7 @@ import { join } from 'node:path';
 import sharp from 'sharp';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import type { Context } from '#server/context.ts';
+import { withOnlyPhotos, withOwnDrawings } from '#server/media/decoders.ts';
 import { DiskMediaStore } from '#server/media/store.ts';
 import { PatternPiece, SharePicture, User, type Series } from '#server/models/index.ts';
 import { sharePictureOf } from '#server/queries/shop/share-pictures.ts';
@@ -96,4 +97,22 @@ describe('the picture that goes along where a series is passed on', () => {
     await drawSharePictures(ctx);
     expect(await SharePicture.count()).toBe(4);
   }, 30_000);
+});
+
+test('photos of people and our own drawings are never read at once', async () => {
+  const seen: string[] = [];
+  const slowly = (name: string) => async (): Promise<void> => {
+    seen.push(`${name} begins`);
+    await new Promise((resolve) => { setTimeout(resolve, 5); });
+    seen.push(`${name} ends`);
+  };
+  const svg = Buffer.from('<svg xmlns="http://www.w3.org/2000/svg" width="9" height="9"/>');
+  const first = [withOnlyPhotos(slowly('photo 1')), withOnlyPhotos(slowly('photo 2'))];
+  await vi.waitUntil(() => seen.length >= 2);
+  const work = [...first, withOwnDrawings(slowly('drawing 1')), withOnlyPhotos(slowly('photo 3')), withOwnDrawings(() => Promise.reject(new Error('no'))), withOnlyPhotos(() => sharp(svg).metadata())];
+  const ended = await Promise.allSettled(work);
+  expect(ended.map(({ status }) => status)).toEqual(['fulfilled', 'fulfilled', 'fulfilled', 'fulfilled', 'rejected', 'rejected']);
+  expect(seen.slice(0, 2)).toEqual(['photo 1 begins', 'photo 2 begins']);
+  expect(seen.indexOf('drawing 1 begins')).toBeGreaterThan(seen.indexOf('photo 2 ends'));
+  expect(seen.indexOf('photo 3 begins')).toBeGreaterThan(seen.indexOf('drawing 1 ends'));
 });
