@@ -50,6 +50,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/teachers/[handle]': [['visitor', '/teachers/saltmarsh']],
   '/techniques/[name]': [['visitor', '/techniques/soumak'], ['visitor', '/techniques/dovetail']],
   '/series/[slug]/[part]/loomside': [['maud', '/series/low-tide/2/loomside'], ['visitor', '/series/low-tide/1/loomside']],
+  '/series/[slug]/finish': [['maud', '/series/low-tide/finish']],
   '/series/[slug]/piece': [['maud', '/series/low-tide/piece']],
   '/workroom': [['ilse', '/workroom'], ['wren', '/workroom'], ['teodor', '/workroom']],
   '/workroom/money': [['ilse', '/workroom/money']],

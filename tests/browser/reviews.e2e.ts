@@ -42,6 +42,7 @@ test('who finished a series says how it was, the teacher answers, the steward ma
   });
 
   await test.step('she writes, is told what is missing, and everybody reads it', async () => {
+    await page.getByRole('link', { name: 'Photo, hours and label' }).click();
     await page.getByRole('link', { name: 'Say how it was' }).click();
     await page.getByLabel('Your name there').fill('N.');
     await page.getByRole('button', { name: 'Keep my words' }).click();

@@ -33,7 +33,7 @@ export function nextWords(facts: NextFacts): NextWords {
     return { where: '', heading: `Part ${to} is being written.`, lead: 'Every part that is out is done. You get a letter when the next one opens to you.', act: { label: 'See the parts again', href: `${address}/1` }, loomSide: undefined };
   }
   if (next.act === 'finished') {
-    return { where: '', heading: `${name} is off the loom.`, lead: 'Every part is done. What you learned stays open to you, as long as you like.', act: { label: 'Say how it was', href: `${address}#reviews` }, loomSide: undefined };
+    return { where: '', heading: `${name} is off the loom.`, lead: 'Every part is done. What you learned stays open to you, as long as you like.', act: { label: 'Photo, hours and label', href: `${address}/finish` }, loomSide: undefined };
   }
   const part = seat.parts.find(({ number }) => 'part' in next && number === next.part.number);
   if (next.act === 'none' || part === undefined) {

@@ -3,6 +3,7 @@ export { AuditEntry } from './audit-entry.ts';
 export { EarlierDraft } from './earlier-draft.ts';
 export { EmailToken } from './email-token.ts';
 export { Enrolment } from './enrolment.ts';
+export { FinishedPiece } from './finished-piece.ts';
 export { FurtherShot } from './further-shot.ts';
 export { GatheringItem } from './gathering-item.ts';
 export { HeldVerdict } from './held-verdict.ts';

@@ -29,6 +29,7 @@ import { createPhotoUploads } from './0028-create-photo-uploads.ts';
 import { addWhatToSee } from './0029-add-what-to-see.ts';
 import { createSharePictures } from './0030-create-share-pictures.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
+import { createFinishedPieces } from './0034-create-finished-pieces.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -60,4 +61,5 @@ export const migrations: readonly Migration[] = [
   addWhatToSee,
   createSharePictures,
   createOwnLooms,
+  createFinishedPieces,
 ];
