@@ -1,3 +1,4 @@
+import { memo } from 'react';
 import type { Asked } from '#core/craft/piece-form/asked.ts';
 import { fieldText, fieldUnit } from '#core/craft/piece-form/field-text.ts';
 import { textOf, type Texts } from '#core/craft/piece-form/typed-piece.ts';
@@ -19,11 +20,15 @@ interface AskedFieldProps {
 }
 
 /** One field of the form, as its `Asked` says: label, box, unit, what counts where it stays empty, and what was found. */
-export function AskedField({ asked, texts, prefix = '', bar = false, className }: AskedFieldProps) {
+export function AskedField({ texts, ...field }: AskedFieldProps) {
+  return <OneField {...field} text={textOf(texts, field.asked.key)} />;
+}
+
+/** Knows its own text only: a letter in the field beside it does not draw it anew. */
+const OneField = memo(function OneField({ asked, text, prefix = '', bar = false, className }: Omit<AskedFieldProps, 'texts'> & { readonly text: string }) {
   const { type } = useHands();
   const { yarns, wrong, heed } = useShown();
   const name = `${prefix}${asked.key}`;
-  const text = textOf(texts, asked.key);
   const words = { name, label: asked.label, hint: asked.hint, error: wrong.get(name) };
   return (
     <div className={className}>
@@ -39,7 +44,7 @@ export function AskedField({ asked, texts, prefix = '', bar = false, className }
       {heed.has(name) && <p className="heed" id={`${fieldId(name)}-heed`}><Glyph name="info" />{heed.get(name)}</p>}
     </div>
   );
-}
+});
 
 interface TextOfProps {
   readonly asked: Asked;

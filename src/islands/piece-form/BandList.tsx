@@ -44,7 +44,7 @@ interface BandListProps {
 
 /** The bands, running as the picture beside them does: what was woven first lies where the picture has it. */
 export function BandList({ bands, laterIsUp, words, chosen, onChoose, open, fresh }: BandListProps) {
-  const { wrong, heed } = useShown();
+  const { units, yarns, wrong, heed } = useShown();
   const { act } = useHands();
   const list = useRef<HTMLOListElement>(null);
   const count = bands.length;
@@ -67,7 +67,7 @@ export function BandList({ bands, laterIsUp, words, chosen, onChoose, open, fres
   const heedOf = useSameEntries(byBand(heed));
   const rows = bands.map((band, index) => (
     <BandRow
-      key={band.id} band={band} index={index} count={count} laterIsUp={laterIsUp} words={words.get(band.id) ?? null}
+      key={band.id} units={units} yarns={yarns} band={band} index={index} count={count} laterIsUp={laterIsUp} words={words.get(band.id) ?? null}
       wrong={wrongOf.get(index) ?? NONE} heed={heedOf.get(index) ?? NONE} isChosen={chosen === band.id} drag={dragOf(held, laterIsUp ? count - index : index + 1)} grip={grip} isOpen={open === index || count === 1 || fresh === `bands.${String(index)}.technique`} onChoose={onChoose}
     />
   ));

@@ -6,12 +6,12 @@ import { Glyph } from '#islands/ui/Glyph.tsx';
 import { Parts } from '#islands/ui/Parts.tsx';
 import { BandFields } from './BandFields.tsx';
 import type { BandWords } from './band-words.ts';
-import { ShownContext, useShown, type Shown } from './hands.ts';
+import { ShownContext, type Shown } from './hands.ts';
 import { Patch } from './Patch.tsx';
 import type { RowGrip } from './use-row-drag.ts';
 import { yarnOf, yarnWords } from './yarn-choices.ts';
 
-export interface BandRowProps {
+export interface BandRowProps extends Pick<Shown, 'units' | 'yarns'> {
   readonly band: TypedBand;
   readonly index: number;
   readonly count: number;
@@ -32,9 +32,11 @@ export interface BandRowProps {
 
 const NO_TEXTS: Shown['texts'] = {};
 
-/** A band: its patch of cloth, technique, yarn and height in one line; open, everything it is asked. */
-export const BandRow = memo(function BandRow({ band, index, count, laterIsUp, words, isChosen, isOpen, wrong, heed, onChoose, drag, grip }: BandRowProps) {
-  const { units, yarns } = useShown();
+/**
+ * A band: its patch of cloth, technique, yarn and height in one line; open, everything it is asked. It is handed what it shows:
+ * a row that looked at what is shown for the whole piece would be drawn anew with every sentence at any field.
+ */
+export const BandRow = memo(function BandRow({ units, yarns, band, index, count, laterIsUp, words, isChosen, isOpen, wrong, heed, onChoose, drag, grip }: BandRowProps) {
   const shown = useMemo((): Shown => ({ units, yarns, texts: NO_TEXTS, wrong, heed }), [units, yarns, wrong, heed]);
   const isWrong = wrong.size > 0;
   const [beginsOpen] = useState(isOpen || isWrong);
