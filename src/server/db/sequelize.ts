@@ -3,7 +3,7 @@
  * the address is asked for by `beforeConnect`, so that a build or a prerendered page needs no database.
  */
 import * as mariadb from 'mariadb';
-import { Sequelize } from 'sequelize';
+import { Sequelize, type QueryOptions } from 'sequelize';
 import { config } from '#server/config.ts';
 import { transactionScope } from '#server/db/transaction-scope.ts';
 
@@ -59,7 +59,20 @@ function open(): Sequelize {
     const dialectOptions = socket === undefined ? options.dialectOptions : { ...options.dialectOptions, socketPath: socket };
     Object.assign(options, { host, port, username: user, password, database: name, dialectOptions });
   });
+  const ask = sequelize.query.bind(sequelize) as (sql: unknown, options?: QueryOptions) => unknown;
+  sequelize.query = ((sql: unknown, options?: QueryOptions) => ask(sql, withTimesInUtc(options))) as typeof sequelize.query;
   return sequelize;
+}
+
+/** The library writes a time among the replacements in the zone of the process, whatever zone it is told; columns hold UTC. */
+function withTimesInUtc(options: QueryOptions | undefined): QueryOptions | undefined {
+  const replacements: unknown = options?.replacements;
+  if (typeof replacements !== 'object' || replacements === null) return options;
+  const inUtc = (value: unknown): unknown => (value instanceof Date ? value.toISOString().replace('T', ' ').replace('Z', '') : value);
+  return {
+    ...options,
+    replacements: Array.isArray(replacements) ? replacements.map(inUtc) : Object.fromEntries(Object.entries(replacements).map(([name, value]) => [name, inUtc(value)])),
+  };
 }
 
 // The development server loads server modules anew after an edit; the pool must survive that.

@@ -24,6 +24,13 @@ describe('rows', () => {
     expect((await Job.findByPk(job.id))?.payload).toEqual({ text: '{"a":1}', list: [1, 'é'] });
   });
 
+  test('a moment handed to a statement of ours is written in UTC, by place and by name', async () => {
+    const at = new Date('2026-10-25T00:30:00.123Z');
+    const asked = { type: QueryTypes.SELECT } as const;
+    expect(await sequelize.query('SELECT CAST(? AS CHAR) AS at', { ...asked, replacements: [at] })).toEqual([{ at: '2026-10-25 00:30:00.123' }]);
+    expect(await sequelize.query('SELECT CAST(:at AS CHAR) AS at', { ...asked, replacements: { at } })).toEqual([{ at: '2026-10-25 00:30:00.123' }]);
+  });
+
   test('moments keep their milliseconds and do not depend on the zone of the process', async () => {
     const user = await buildUser({ emailConfirmedAt: new Date('2026-10-25T00:30:00.123Z') });
     expect((await User.findByPk(user.id))?.emailConfirmedAt?.toISOString()).toBe('2026-10-25T00:30:00.123Z');
