@@ -2,6 +2,7 @@
  * Finding series by what somebody typed. Forms of one word find each other (*warping* finds *warp*), the nearest come
  * first, and a word that nothing has, typed badly, is taken for the one that was meant.
  */
+import { nearestWord } from '#core/handbook/nearest-word.ts';
 import { isCommonWord, stemOf } from '#core/questions/like-words.ts';
 
 /** What is known of a series by words; what stands first weighs most. */
@@ -14,9 +15,6 @@ export interface SearchedTexts {
 }
 
 const MOST_TERMS = 6;
-/** Of shorter words every second one would be near to every other. */
-const SHORTEST_MENDED = 4;
-const TWO_SLIPS_FROM = 7;
 
 /** Without regard to case and accents. */
 const plain = (text: string): string => text.normalize('NFD').replace(/\p{M}/gu, '').toLowerCase();
@@ -46,45 +44,15 @@ export function nearness(terms: readonly string[], texts: SearchedTexts): number
 
 /**
  * What was typed, with each word that nothing in `vocabulary` has changed into the nearest one there.
- * One slip is forgiven in words of four letters and more, two from seven on; a slip is a letter too many, too few, another
- * one, or two in each other's place. @returns null when there is nothing to change.
+ * @returns null when there is nothing to change
  */
 export function meantBy(typed: string, vocabulary: readonly string[]): string | null {
   const known = [...new Set(vocabulary.flatMap(wordsOf))].toSorted();
   const mended = typed.split(/\s+/u).filter((piece) => piece !== '').map((piece) => {
     const word = plain(piece);
-    if (!/^\p{L}+$/u.test(word) || word.length < SHORTEST_MENDED || known.some((other) => other.includes(stemOf(word)))) return piece;
-    return nearest(word, known) ?? piece;
+    if (!/^\p{L}+$/u.test(word) || known.some((other) => other.includes(stemOf(word)))) return piece;
+    return nearestWord(word, known) ?? piece;
   });
   const meant = mended.join(' ');
   return meant === typed.split(/\s+/u).filter((piece) => piece !== '').join(' ') ? null : meant;
-}
-
-function nearest(word: string, known: readonly string[]): string | null {
-  const most = word.length >= TWO_SLIPS_FROM ? 2 : 1;
-  let best: { readonly word: string; readonly slips: number } | null = null;
-  for (const other of known) {
-    if (Math.abs(other.length - word.length) > most || other.length < SHORTEST_MENDED) continue;
-    const slips = slipsBetween(word, other);
-    if (slips <= most && (best === null || slips < best.slips)) best = { word: other, slips };
-  }
-  return best?.word ?? null;
-}
-
-/** Optimal string alignment: letters put in, left out, changed, or swapped with the next (Damerau 1964, Commun. ACM 7 171). */
-function slipsBetween(a: string, b: string): number {
-  let before: number[] = [];
-  let above = Array.from({ length: b.length + 1 }, (_, at) => at);
-  for (let row = 1; row <= a.length; row += 1) {
-    const here = [row];
-    for (let at = 1; at <= b.length; at += 1) {
-      const same = a[row - 1] === b[at - 1] ? 0 : 1;
-      const steps = [(here[at - 1] ?? 0) + 1, (above[at] ?? 0) + 1, (above[at - 1] ?? 0) + same];
-      const isSwap = row > 1 && at > 1 && a[row - 1] === b[at - 2] && a[row - 2] === b[at - 1];
-      here.push(Math.min(...steps, isSwap ? (before[at - 2] ?? 0) + 1 : Infinity));
-    }
-    before = above;
-    above = here;
-  }
-  return above[b.length] ?? 0;
 }
