@@ -84,7 +84,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
 const NO_PAGES = new Set([
-  '/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/calendar/[key].ics',
+  '/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/series/[slug]/gather.txt', '/calendar/[key].ics',
   '/robots.txt', '/sitemap.xml', '/series/feed.atom', '/teachers/[handle]/feed.atom', '/series/[slug]/share.png',
 ]);
 
