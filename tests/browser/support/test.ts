@@ -9,13 +9,13 @@ import { expect, test as base, type Page } from 'playwright/test';
 const ANSWERED_ON_PURPOSE = /^Failed to load resource: the server responded with a status of (?:402|403|404|409|410|422|429)\b/;
 
 /** Said by the runner where a journey goes without a service worker (playwright.config.ts). */
-const WITHOUT_WORKER = /^Service Worker registration blocked by Playwright/;
+const WITHOUT_WORKER = 'Service Worker registration blocked by Playwright';
 
 export const test = base.extend({
   page: async ({ page }, use) => {
     const faults: string[] = [];
     page.on('console', (message) => {
-      if (['error', 'warning'].includes(message.type()) && !ANSWERED_ON_PURPOSE.test(message.text()) && !WITHOUT_WORKER.test(message.text())) faults.push(`${page.url()}: ${message.text()}`);
+      if (['error', 'warning'].includes(message.type()) && !ANSWERED_ON_PURPOSE.test(message.text()) && !message.text().startsWith(WITHOUT_WORKER)) faults.push(`${page.url()}: ${message.text()}`);
     });
     page.on('pageerror', (error) => { faults.push(`${page.url()}: ${error.message}`); });
     await use(page);
