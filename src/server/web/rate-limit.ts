@@ -33,6 +33,8 @@ export const RATE_RULES = {
   spendLink: { name: 'spend-link', limit: 60, windowSeconds: 3_600 },
   checkout: { name: 'checkout', limit: 10, windowSeconds: 3_600 },
   photo: { name: 'photo', limit: 60, windowSeconds: 3_600 },
+  /** Certificates drawn for one person. */
+  certificate: { name: 'certificate', limit: 60, windowSeconds: 3_600 },
   /** Questions and reports of one person. */
   question: { name: 'question', limit: 30, windowSeconds: 3_600 },
   report: { name: 'report', limit: 30, windowSeconds: 3_600 },
