@@ -1,5 +1,6 @@
 /** What somebody writes down of a piece that is off the loom. */
 import { z } from 'astro/zod';
+import { filled } from '#contracts/fields.ts';
 import { parseTime } from '#core/units/parse-time.ts';
 
 const series = z.string().regex(/^[a-z0-9-]{1,64}$/);
@@ -27,3 +28,23 @@ export const FinishedForm = z.object({
   typed: Object.fromEntries(Object.entries(others).filter((entry): entry is [string, string] => typeof entry[1] === 'string')),
 }));
 export type FinishedInput = z.output<typeof FinishedForm>;
+
+export const HangForm = z.object({
+  series,
+  name: filled('The name is missing. Write how you want to be called there; a first name is enough.', 80),
+  words: z.string().trim().max(500, 'At most 500 characters work here.').default(''),
+  agreed: z.literal('yes', { errorMap: () => ({ message: 'Nothing is shown without your agreement. Tick this when you want your piece to be seen.' }) }),
+});
+export type HangInput = z.output<typeof HangForm>;
+
+/** Hidden fields: what is not one of ours finds nothing. */
+const publicId = z.string().max(26).catch('');
+
+export const HidePieceForm = z.object({
+  piece: publicId,
+  reason: filled('The reason is missing. Its maker reads it, and it is kept in the log.', 300),
+});
+export type HidePieceInput = z.output<typeof HidePieceForm>;
+
+export const ShowPieceForm = z.object({ piece: publicId });
+export type ShowPieceInput = z.output<typeof ShowPieceForm>;

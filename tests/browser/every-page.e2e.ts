@@ -47,6 +47,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
   '/series/[slug]/seat': [['maud', '/series/low-tide/seat']],
   '/sign-in': [['visitor', '/sign-in']],
   '/sign-up': [['visitor', '/sign-up']],
+  '/wall': [['visitor', '/wall']],
   '/teachers/[handle]': [['visitor', '/teachers/saltmarsh']],
   '/techniques/[name]': [['visitor', '/techniques/soumak'], ['visitor', '/techniques/dovetail']],
   '/series/[slug]/[part]/loomside': [['maud', '/series/low-tide/2/loomside'], ['visitor', '/series/low-tide/1/loomside']],
@@ -85,7 +86,7 @@ const PAGES: Readonly<Record<string, readonly (readonly [who: DemoName | 'visito
 /** Answers that are no pages of their own, or only after a step that a journey tests. */
 const NO_PAGES = new Set([
   '/500', '/_actions/[...path]', '/_image', '/_server-islands/[name]', '/_components', '/helping/[token]', '/leave/[key]', '/workroom/notices/[notice]/edit', '/workroom/series/bring-in/[folder]', '/media/[id]/[file]', '/sign-out', '/series/[slug]/calendar.ics', '/series/[slug]/gather.txt', '/calendar/[key].ics',
-  '/robots.txt', '/sitemap.xml', '/series/feed.atom', '/teachers/[handle]/feed.atom', '/series/[slug]/share.png',
+  '/robots.txt', '/sitemap.xml', '/series/feed.atom', '/teachers/[handle]/feed.atom', '/series/[slug]/share.png', '/series/[slug]/certificate.pdf',
 ]);
 
 test('every page of the program is looked at', () => {

@@ -46,6 +46,7 @@ export { Tick } from './tick.ts';
 export { User } from './user.ts';
 export { VideoPlace } from './video-place.ts';
 export { VideoUpload } from './video-upload.ts';
+export { WallPiece } from './wall-piece.ts';
 export { WeavingTime } from './weaving-time.ts';
 export { WordReport } from './word-report.ts';
 export { Workroom } from './workroom.ts';

@@ -9,8 +9,8 @@ import { sendFile } from '#server/web/send-file.ts';
  * from its lines, those of the draft for who looks after it.
  */
 export const GET: APIRoute = async ({ params: { id = '', file: name = '' }, locals: { ctx } }) => {
-  const { media, looksAfter } = found(await mediaFor(ctx.actor, id, ctx.clock.now()));
+  const { media, looksAfter, mayBeWithdrawn } = found(await mediaFor(ctx.actor, id, ctx.clock.now()));
   if (name === 'captions') return sendCaptions(found(media.detail.cues));
   if (name === 'captions-draft') return sendCaptions(found(looksAfter ? (media.draftDetail ?? media.detail).cues : null));
-  return sendFile(found(media.state === 'ready' && Object.hasOwn(media.files, name) ? media.files[name] : null));
+  return sendFile(found(media.state === 'ready' && Object.hasOwn(media.files, name) ? media.files[name] : null), mayBeWithdrawn ? 'ask-each-time' : 'keep-an-hour');
 };

@@ -30,6 +30,7 @@ import { addWhatToSee } from './0029-add-what-to-see.ts';
 import { createSharePictures } from './0030-create-share-pictures.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createFinishedPieces } from './0034-create-finished-pieces.ts';
+import { createWallPieces } from './0035-create-wall-pieces.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -62,4 +63,5 @@ export const migrations: readonly Migration[] = [
   createSharePictures,
   createOwnLooms,
   createFinishedPieces,
+  createWallPieces,
 ];

@@ -2,22 +2,25 @@
 import { QueryTypes } from 'sequelize';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
-import { Media } from '#server/models/index.ts';
+import { FinishedPiece, Media } from '#server/models/index.ts';
 import { looksAfterMedia, maySeeMedia, type MediaUse } from '#server/policies/media.ts';
+import { isPhotoOnWall } from '#server/queries/finish/wall-pieces.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 
 export interface MediaFor {
   readonly media: Media;
   /** Whether the asker looks after it, and so may see its drafts. */
   readonly looksAfter: boolean;
+  /** Whether who may see it can change at any moment, so that a browser must ask each time. */
+  readonly mayBeWithdrawn: boolean;
 }
 
 /** The file, when `actor` may see it; null when there is none or it must look so. */
 export async function mediaFor(actor: Actor | null, publicId: string, now: Date): Promise<MediaFor | null> {
   const media = await Media.findOne({ where: { publicId } });
   if (media === null) return null;
-  const uses = media.kind === 'photo' ? await photoUses(media.id) : await lessonUses(actor, media.id, now);
-  return maySeeMedia(actor, media.ownerId, uses) ? { media, looksAfter: looksAfterMedia(actor, media.ownerId, uses) } : null;
+  const uses = media.kind === 'photo' ? [...(await photoUses(media.id)), ...(await finishedUses(media.id))] : await lessonUses(actor, media.id, now);
+  return maySeeMedia(actor, media.ownerId, uses) ? { media, looksAfter: looksAfterMedia(actor, media.ownerId, uses), mayBeWithdrawn: uses.some(({ kind }) => kind === 'finished') } : null;
 }
 
 async function photoUses(mediaId: number): Promise<MediaUse[]> {
@@ -28,6 +31,11 @@ async function photoUses(mediaId: number): Promise<MediaUse[]> {
     { replacements: { mediaId }, type: QueryTypes.SELECT },
   );
   return rows.map((row) => ({ kind: 'progress-photo', ...row }));
+}
+
+async function finishedUses(mediaId: number): Promise<MediaUse[]> {
+  if ((await FinishedPiece.count({ where: { mediaId } })) === 0) return [];
+  return [{ kind: 'finished', onWall: await isPhotoOnWall(mediaId) }];
 }
 
 /** A draft is used in no part yet, whatever the texts say: only who looks after the series finds it. */

@@ -8,6 +8,7 @@ import { digestOf, takePhoto } from '#server/media/photo.ts';
 import { Media } from '#server/models/index.ts';
 import { countUse, RATE_RULES } from '#server/web/rate-limit.ts';
 import { heldRow, writableBy } from './_finished-row.ts';
+import { offWall } from './_off-wall.ts';
 import { forgetPhoto } from './_forget-photo.ts';
 
 export interface ShowFinishedInput {
@@ -17,7 +18,7 @@ export interface ShowFinishedInput {
 }
 
 /**
- * Puts the photo of a finished piece in its place; the one before it goes. It is read and written anew before any row
+ * Puts the photo of a finished piece in its place; the one before it goes, and with it what she agreed to show. It is read and written anew before any row
  * is made, like every photo.
  * @throws as `writableBy`; UNSUPPORTED, TOO_LARGE; RATE_LIMITED.
  */
@@ -35,6 +36,7 @@ export async function showFinished(ctx: Context, { series, file }: ShowFinishedI
     const media = await Media.create({ publicId, ownerId, kind: 'photo', state: 'ready', originalName: displayName(file.originalName), digest, byteCount, width, height, files, detail: {} });
     const { mediaId } = row;
     await row.update({ mediaId: media.id });
+    await offWall(ctx, seat.enrolmentId);
     return mediaId;
   }));
   await forgetPhoto(store, before);
