@@ -11,6 +11,6 @@ const MOST = 20_000;
 export const GET: APIRoute = ({ request, locals: { ctx } }) =>
   answering(ctx.requestId, async () => {
     const [series, parts, taught, handbook] = [await openSeries({ limit: MOST }), await openParts(MOST), await taughtTechniques(), await getCollection('handbook')];
-    const own = ['/', '/series', '/gifts', '/handbook', '/reckoner', ...taught.map(({ key }) => `/techniques/${encodeURIComponent(key)}`), ...handbook.map(({ id }) => `/handbook/${id}`).toSorted()].map((path) => ({ path }));
+    const own = ['/', '/series', '/gifts', '/wall', '/handbook', '/reckoner', ...taught.map(({ key }) => `/techniques/${encodeURIComponent(key)}`), ...handbook.map(({ id }) => `/handbook/${id}`).toSorted()].map((path) => ({ path }));
     return sendDocument(request, sitemap([...own, ...placesOf(series, parts)]), 'application/xml; charset=utf-8');
   });
