@@ -1,4 +1,7 @@
-/** From the last part to words about the series: a finisher writes, the teacher answers, the steward hides and shows. */
+/**
+ * From the last part to words about the series: a finisher keeps and hangs her piece, takes it down, and writes; the teacher answers, the
+ * steward hides and shows.
+ */
 import { expect, type Browser, type Page } from 'playwright/test';
 import sharp from 'sharp';
 import { stateOf, type DemoName } from './support/demo-people.ts';
@@ -41,8 +44,45 @@ test('who finished a series says how it was, the teacher answers, the steward ma
     await page.goto('/loom');
   });
 
-  await test.step('she writes, is told what is missing, and everybody reads it', async () => {
+  await test.step('on a phone she keeps photo, yarn and hours, hangs the piece, and it is gone when she takes it down', async () => {
+    const window = page.viewportSize();
+    await page.setViewportSize({ width: 390, height: 844 });
     await page.getByRole('link', { name: 'Photo, hours and label' }).click();
+    const buffer = await sharp({ create: { width: 600, height: 800, channels: 3, background: '#8d9f9c' } }).jpeg().toBuffer();
+    await page.getByLabel('Photo of the finished piece').setInputFiles({ name: 'cords.jpg', mimeType: 'image/jpeg', buffer });
+    await page.getByRole('button', { name: 'Keep this photo' }).click();
+    await page.getByLabel(/^Hours it took/).fill('3 h 30');
+    await page.getByLabel('Made of').first().fill('60 % cotton, 60 % jute');
+    await page.getByRole('button', { name: 'Write it down' }).click();
+    await expect(page.getByText('That comes to 120 %.').first()).toBeVisible();
+    await page.getByLabel('Made of').first().fill('jute');
+    await page.getByRole('button', { name: 'Write it down' }).click();
+    await expect(page.getByLabel('Care').getByText('Do not wash.')).toBeVisible();
+    await page.getByRole('button', { name: 'Hang it on the wall' }).click();
+    await expect(page.getByText('Nothing is shown without your agreement.').first()).toBeVisible();
+    await page.getByLabel('Your name there').last().fill(name);
+    await page.getByLabel(/^I agree/).check();
+    await page.getByRole('button', { name: 'Hang it on the wall' }).click();
+    await expect(page.getByText(`as “${name}”`)).toBeVisible();
+    await expectFaultless(page);
+    const certificate = await page.request.get(`${SERIES}/certificate.pdf?day=2026-12-01&name=${encodeURIComponent(name)}`);
+    expect([certificate.status(), certificate.headers()['content-type']]).toEqual([200, 'application/pdf']);
+    const visitor = await (await browser.newContext()).newPage();
+    await visitor.goto('/wall');
+    const photo = visitor.getByRole('img', { name: `${CORDS.title}, made by ${name}` });
+    await expect(photo).toBeVisible();
+    const address = await photo.getAttribute('src') ?? '';
+    expect((await visitor.request.get(address)).status()).toBe(200);
+    await page.getByRole('button', { name: 'Take it off the wall' }).click();
+    await expect(page.getByRole('button', { name: 'Hang it on the wall' })).toBeVisible();
+    expect((await visitor.request.get(address)).status()).toBe(404);
+    await visitor.reload();
+    await expect(photo).toHaveCount(0);
+    await visitor.context().close();
+    if (window !== null) await page.setViewportSize(window);
+  });
+
+  await test.step('she writes, is told what is missing, and everybody reads it', async () => {
     await page.getByRole('link', { name: 'Say how it was' }).click();
     await page.getByLabel('Your name there').fill('N.');
     await page.getByRole('button', { name: 'Keep my words' }).click();
