@@ -1,6 +1,7 @@
 /** Forms about notices: reading them, and in the workroom writing them. */
 import { defineAction } from 'astro:actions';
 import { LettersForm, MarkReadForm, NoticeDraftForm, NoticeForm, NudgeForm, SendNoticeForm } from '#contracts/notices.ts';
+import type { AnswerPace } from '#core/notices/letter-kinds.ts';
 import { momentWords } from '#core/moment-words.ts';
 import { signedIn } from '#server/errors.ts';
 import { chooseLetters } from '#server/use-cases/letters/choose-letters.ts';
@@ -15,6 +16,12 @@ import { safeReturn } from '#server/web/gate.ts';
 import { formAction } from './form-action.ts';
 
 const deskAt = (notice: string): string => `/workroom/notices/${notice}`;
+
+const ANSWERS_SAID: Readonly<Record<AnswerPace, string>> = {
+  'at-once': 'Answers come at once.',
+  daily: 'Answers come in one letter a day.',
+  never: 'Answers stand under Notices only.',
+};
 
 export const notices = {
   keep: formAction(NoticeDraftForm, async (input, ctx) => {
@@ -47,7 +54,7 @@ export const notices = {
 
   chooseLetters: formAction(LettersForm, async (input, ctx, api) => {
     const workroom = await chooseLetters(ctx, input);
-    return { to: safeReturn(`${api.url.pathname}#letters`, '/account#letters'), said: input.wanted.length === 0 ? `No letters of ${workroom} but those about your own doings.` : `Kept: these letters of ${workroom} come to you.` };
+    return { to: safeReturn(`${api.url.pathname}#letters`, '/account#letters'), said: `${input.wanted.length === 0 ? `No letters of ${workroom} but those about your own doings.` : `Kept: these letters of ${workroom} come to you.`} ${ANSWERS_SAID[input.answers]}` };
   }),
 
   /** She stays where she is. */

@@ -1,7 +1,7 @@
 /** Notices and nudges: what a teacher writes to her students, and what a student does with them. */
 import { z } from 'astro/zod';
 import { filled } from '#contracts/fields.ts';
-import { LETTER_KINDS } from '#core/notices/letter-kinds.ts';
+import { ANSWER_PACES, LETTER_KINDS } from '#core/notices/letter-kinds.ts';
 import type { SaidBlock } from '#core/notices/said.ts';
 
 const publicId = z.string().regex(/^[0-9a-z]{26}$/);
@@ -12,9 +12,9 @@ export type MarkReadInput = z.output<typeof MarkReadForm>;
 
 const ticked = z.string().optional().catch(undefined).transform((value) => value !== undefined);
 
-/** Which letters of a workroom she wants; what is not ticked she does not. */
-export const LettersForm = z.object({ workroom: publicId, source: z.enum(['account', 'notices', 'seat']), notices: ticked, nudges: ticked })
-  .transform(({ workroom, source, ...kinds }) => ({ workroom, source, wanted: LETTER_KINDS.filter((kind) => kinds[kind]) }));
+/** Which letters of a workroom she wants, and how often those about answers come; what is not ticked she does not. */
+export const LettersForm = z.object({ workroom: publicId, source: z.enum(['account', 'notices', 'seat']), notices: ticked, nudges: ticked, answers: z.enum(ANSWER_PACES).default('at-once') })
+  .transform(({ workroom, source, answers, ...kinds }) => ({ workroom, source, answers, wanted: LETTER_KINDS.filter((kind) => kinds[kind]) }));
 export type LettersInput = z.output<typeof LettersForm>;
 
 const Run = z.object({ words: z.string(), strong: z.literal(true).optional(), href: z.string().optional() });

@@ -52,7 +52,7 @@ export async function bringMaudToPartTwo(maud: User, series: Series, seat: Enrol
 
 /** Maud wants to hear from Ilse by letter too. */
 export async function askForLetters(maud: User, { publicId }: Workroom): Promise<void> {
-  await chooseLetters(await actingAs(maud), { workroom: publicId, source: 'seat', wanted: [...LETTER_KINDS] });
+  await chooseLetters(await actingAs(maud), { workroom: publicId, source: 'seat', wanted: [...LETTER_KINDS], answers: 'at-once' });
 }
 
 /** What Ilse wrote to her class on the day before. */

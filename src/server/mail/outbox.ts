@@ -1,6 +1,6 @@
 /** Writes a letter into the outbox; part of the caller's transaction. The worker sends it. */
 import { UniqueConstraintError } from 'sequelize';
-import type { LetterKind } from '#core/notices/letter-kinds.ts';
+import type { ListKind } from '#core/notices/letter-kinds.ts';
 import { Mail } from '#server/models/index.ts';
 import type { TemplateData, TemplateName } from '#server/mail/templates/index.ts';
 
@@ -10,10 +10,12 @@ export interface LetterTo<T extends TemplateName> {
   readonly to: { readonly userId: number | null; readonly name: string; readonly address: string };
   /** At most one letter with this key is ever written, e.g. `receipt:<order>`. */
   readonly dedupeKey: string;
+  /** Not sent before; at once when absent. */
+  readonly notBefore?: Date;
   /** After this the letter is worthless and is not sent. */
   readonly expiresAt?: Date;
-  /** Only for letters she asked for: asked again when it is sent, so that leaving stops what waits. */
-  readonly list?: { readonly workroomId: number; readonly kind: LetterKind };
+  /** For letters she can leave: asked again when it is sent, so that leaving stops what waits. */
+  readonly list?: { readonly workroomId: number; readonly kind: ListKind };
 }
 
 /** @returns false when a letter with the same key was there already. */
@@ -29,7 +31,7 @@ export async function postLetter<T extends TemplateName>(letter: LetterTo<T>): P
       expiresAt: letter.expiresAt ?? null,
       listWorkroomId: letter.list?.workroomId ?? null,
       listKind: letter.list?.kind ?? null,
-      runAt: new Date(),
+      runAt: letter.notBefore ?? new Date(),
     });
     return true;
   } catch (error) {

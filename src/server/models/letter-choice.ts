@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { LETTER_KINDS, type LetterKind } from '#core/notices/letter-kinds.ts';
+import { LIST_KINDS, type ListKind } from '#core/notices/letter-kinds.ts';
 import { count, id, moment, oneOf, ref, yes } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
@@ -11,8 +11,10 @@ export class LetterChoice extends Model<InferAttributes<LetterChoice>, InferCrea
   declare id: CreationOptional<number>;
   declare userId: number;
   declare workroomId: number;
-  declare kind: LetterKind;
+  declare kind: ListKind;
   declare isWanted: boolean;
+  /** Gathered in one letter a day; of letters about answers only. */
+  declare isDaily: CreationOptional<boolean>;
   /** Number of the words that were agreed to. */
   declare wording: number;
   declare source: 'account' | 'notices' | 'seat' | 'letter';
@@ -23,8 +25,9 @@ LetterChoice.init({
   id: id(),
   userId: ref(),
   workroomId: ref(),
-  kind: oneOf(LETTER_KINDS),
+  kind: oneOf(LIST_KINDS),
   isWanted: yes(false),
+  isDaily: yes(false),
   wording: count(),
   source: oneOf(['account', 'notices', 'seat', 'letter']),
   createdAt: moment(),

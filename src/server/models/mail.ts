@@ -1,5 +1,5 @@
 import { Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { LETTER_KINDS, type LetterKind } from '#core/notices/letter-kinds.ts';
+import { LIST_KINDS, type ListKind } from '#core/notices/letter-kinds.ts';
 import { count, id, json, maybeMoment, maybeRef, maybeText, moment, oneOf, text } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
@@ -14,9 +14,9 @@ export class Mail extends Model<InferAttributes<Mail>, InferCreationAttributes<M
   declare data: Record<string, unknown>;
   declare expiresAt: CreationOptional<Date | null>;
   declare sentAt: CreationOptional<Date | null>;
-  /** The list it goes to, which she can leave until the moment it is sent; null for letters about her own doings. */
+  /** The list it goes to, which she can leave until the moment it is sent; null for letters that always come. */
   declare listWorkroomId: CreationOptional<number | null>;
-  declare listKind: CreationOptional<LetterKind | null>;
+  declare listKind: CreationOptional<ListKind | null>;
   /** `dropped`: not sent, because she wants no such letters, or her address takes none. */
   declare state: CreationOptional<'ready' | 'done' | 'dead' | 'dropped'>;
   declare runAt: Date;
@@ -39,7 +39,7 @@ Mail.init({
   expiresAt: maybeMoment(),
   sentAt: maybeMoment(),
   listWorkroomId: maybeRef(),
-  listKind: { ...oneOf(LETTER_KINDS), allowNull: true, defaultValue: null },
+  listKind: { ...oneOf(LIST_KINDS), allowNull: true, defaultValue: null },
   state: oneOf(['ready', 'done', 'dead', 'dropped'], 'ready'),
   runAt: moment(),
   attempts: count(),

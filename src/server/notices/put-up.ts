@@ -36,7 +36,7 @@ export async function putUpLetter<T extends TemplateName>(letter: LetterTo<T>, a
 }
 
 /** What a letter says without what makes it a letter. Its addresses become paths of this site. */
-function saidIn(template: TemplateName, data: unknown): Said {
+export function saidIn(template: TemplateName, data: unknown): Said {
   const { subject, blocks } = TEMPLATES[template].compose(data, { publicUrl: '' });
   const act = blocks.find((block) => block.kind === 'act');
   return {

@@ -1,5 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { VerdictForm } from '#contracts/bench.ts';
+import { verdict } from '#server/mail/templates/bench.ts';
 import { HeldVerdict, Job, Mail, Media, PhotoNote, ProgressPhoto, User, WorkroomHelper, Workroom, type Enrolment, type Lesson, type Series } from '#server/models/index.ts';
 import { benchDesk } from '#server/queries/bench/bench-desk.ts';
 import { answeredLately, heldBy } from '#server/queries/bench/said-lately.ts';
@@ -59,6 +60,9 @@ describe('a verdict', () => {
     const thread = await photoThread(all.seat.id, all.checkpoint.id);
     expect(thread.map(({ verdict, verdictBy, notes }) => [verdict, verdictBy, notes.length])).toEqual([['mend-first', 'Ilse Marrow', 1], ['waits', null, 0]]);
     expect(thread.map(({ see }) => see)).toEqual(['fault:crossed-ends', null]);
+    const letter = await Mail.findOne({ rejectOnEmpty: true });
+    expect(letter.data['see']).toMatchObject({ href: expect.stringMatching(/^\/handbook\//) });
+    expect(verdict.compose(letter.data, { publicUrl: 'https://fellmark.example' }).blocks).toContainEqual({ kind: 'prose', runs: [{ words: 'How to mend it: ' }, { words: expect.stringContaining('how to mend it'), href: expect.stringMatching(/^\/handbook\//) }] });
     expect(thread[0]?.notes[0]).toEqual({ words: 'Ends 14 and 15 change places here.', shot: 1, xPermille: 460, yPermille: 520 });
     expect((await seriesFor(await actorOf(all.student), all.series.slug, new Date()))?.parts[1]?.access.may).toBe('wait');
   });

@@ -31,6 +31,7 @@ import { createSharePictures } from './0030-create-share-pictures.ts';
 import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createFinishedPieces } from './0034-create-finished-pieces.ts';
 import { createWallPieces } from './0035-create-wall-pieces.ts';
+import { addAnswerLetters } from './0040-add-answer-letters.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -64,4 +65,5 @@ export const migrations: readonly Migration[] = [
   createOwnLooms,
   createFinishedPieces,
   createWallPieces,
+  addAnswerLetters,
 ];

@@ -1,5 +1,6 @@
 /** Every letter the house writes, by name. A template's data is checked when the letter is written and again when it is sent. */
 import type { z } from 'astro/zod';
+import { answersGathered } from './answers.ts';
 import { verdict } from './bench.ts';
 import { seatBought, seatRefused } from './checkout.ts';
 import { helpEnded, helperInvited } from './helpers.ts';
@@ -11,6 +12,7 @@ import { accountExists, confirmAddress, newPassword, passwordChanged } from './p
 
 export const TEMPLATES = {
   'account-exists': accountExists,
+  'answers-gathered': answersGathered,
   'confirm-address': confirmAddress,
   'help-ended': helpEnded,
   'helper-invited': helperInvited,

@@ -4,7 +4,8 @@ import type { FittedPiece } from '#core/craft/fit.ts';
 import type { StepOfPart } from '#core/following/see-to-mend.ts';
 import type { NoteInput } from '#contracts/bench.ts';
 import type { Actor } from '#server/context.ts';
-import { HeldVerdict, Lesson, LessonVersion, ProgressPhoto, User } from '#server/models/index.ts';
+import { HeldVerdict, ProgressPhoto, User } from '#server/models/index.ts';
+import { stepsOfPart } from '#server/queries/lessons/steps-of-part.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { photoThread, type ThreadPhoto, type ThreadShot } from '#server/queries/photos/photo-thread.ts';
 import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
@@ -57,7 +58,7 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
     earlierPhotos(photo.enrolmentId, photo.publicId),
     phrasesOfWorkroom(photo.workroomId),
     takenBackOf(actor, photo.publicId),
-    stepsOf(photo.lessonId),
+    stepsOfPart(photo.lessonId),
   ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   const placeInThread = thread.findIndex(({ publicId }) => publicId === photo.publicId);
@@ -65,13 +66,6 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
     queue,
     inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps },
   };
-}
-
-async function stepsOf(lessonId: number): Promise<readonly StepOfPart[]> {
-  const lesson = await Lesson.findByPk(lessonId, { attributes: ['publishedVersionId'] });
-  const versionId = lesson?.publishedVersionId ?? null;
-  const version = versionId === null ? null : await LessonVersion.findByPk(versionId, { attributes: ['facts'] });
-  return version?.facts.steps ?? [];
 }
 
 async function takenBackOf(actor: Actor, publicId: string): Promise<TakenBack | null> {

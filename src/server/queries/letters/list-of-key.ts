@@ -1,10 +1,10 @@
-import type { LetterKind } from '#core/notices/letter-kinds.ts';
+import type { ListKind } from '#core/notices/letter-kinds.ts';
 import { readLeaveKey } from '#server/auth/leave-key.ts';
 import { User, Workroom } from '#server/models/index.ts';
 import { wantsLetters } from './letter-choices.ts';
 
 export interface ListOfKey {
-  readonly kind: LetterKind;
+  readonly kind: ListKind;
   readonly workroom: string;
   /** False once she has left. */
   readonly isWanted: boolean;

@@ -1,19 +1,23 @@
-import { LETTER_WORDING, type LetterKind } from '#core/notices/letter-kinds.ts';
+import { LETTER_WORDING, type AnswerPace, type ListKind } from '#core/notices/letter-kinds.ts';
 import { LetterChoice, User } from '#server/models/index.ts';
-import { wantsLetters } from '#server/queries/letters/letter-choices.ts';
+import { letterPace } from '#server/queries/letters/letter-choices.ts';
 import { found } from '#server/errors.ts';
 
 export interface Chosen {
   readonly userId: number;
   readonly workroomId: number;
-  readonly kind: LetterKind;
-  readonly isWanted: boolean;
+  readonly kind: ListKind;
+  readonly pace: AnswerPace;
   readonly source: LetterChoice['source'];
 }
 
-/** Puts a choice on record, unless it is the one that holds already. Must run in a transaction; her own row is the lock. */
-export async function recordChoice({ isWanted, ...of }: Chosen, now: Date): Promise<void> {
+/**
+ * Puts a choice on record, unless it is the one that holds already. Must run in a transaction; her own row is the lock.
+ * @returns whether it is a new one.
+ */
+export async function recordChoice({ pace, ...of }: Chosen, now: Date): Promise<boolean> {
   found(await User.findByPk(of.userId, { lock: true, attributes: ['id'] }));
-  if ((await wantsLetters(of.userId, of.workroomId, of.kind)) === isWanted) return;
-  await LetterChoice.create({ ...of, isWanted, wording: LETTER_WORDING, createdAt: now });
+  if ((await letterPace(of.userId, of.workroomId, of.kind)) === pace) return false;
+  await LetterChoice.create({ ...of, isWanted: pace !== 'never', isDaily: pace === 'daily', wording: LETTER_WORDING, createdAt: now });
+  return true;
 }

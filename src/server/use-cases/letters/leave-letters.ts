@@ -13,7 +13,7 @@ import { recordChoice } from './_record-choice.ts';
 export async function leaveLetters(ctx: Context, key: string): Promise<void> {
   const { kind, ...of } = found(readLeaveKey(key));
   const { user, workroom } = await whoAndWhere(of);
-  await withTransaction(() => recordChoice({ userId: user.id, workroomId: workroom.id, kind, isWanted: false, source: 'letter' }, ctx.clock.now()));
+  await withTransaction(() => recordChoice({ userId: user.id, workroomId: workroom.id, kind, pace: 'never', source: 'letter' }, ctx.clock.now()));
 }
 
 async function whoAndWhere({ person, workroom }: Omit<LeaveOf, 'kind'>): Promise<{ user: User; workroom: Workroom }> {

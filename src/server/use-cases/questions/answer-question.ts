@@ -3,9 +3,9 @@ import type { AnswerInput } from '#contracts/questions.ts';
 import type { Context } from '#server/context.ts';
 import { withTransaction } from '#server/db/transaction.ts';
 import { AppError, authorize, found, signedIn } from '#server/errors.ts';
-import { postLetter, type LetterTo } from '#server/mail/outbox.ts';
+import type { LetterTo } from '#server/mail/outbox.ts';
 import { Enrolment, Lesson, Question, QuestionAnswer, Series, User, Workroom } from '#server/models/index.ts';
-import { putUpLetter } from '#server/notices/put-up.ts';
+import { answerList, tellAnswer } from '#server/notices/tell-answer.ts';
 import { mayAnswer } from '#server/policies/question.ts';
 
 export interface Answered {
@@ -34,7 +34,7 @@ export async function answerQuestion(ctx: Context, input: AnswerInput): Promise<
     if (before.length > input.seen) throw await answeredMeanwhile(before.at(-1));
     const answer = await QuestionAnswer.create({ questionId: question.id, authorId: actor.userId, words: input.words, createdAt: ctx.clock.now() });
     if (question.answeredAt === null) await question.update({ answeredAt: ctx.clock.now() });
-    await tellAsker({ question, asker, lesson, series, answer, by: actor });
+    await tellAsker({ question, asker, lesson, series, answer, by: actor }, ctx.clock.now());
     return { question, askerName: asker.name };
   });
 }
@@ -54,7 +54,7 @@ interface Told {
 }
 
 /** Nothing goes to who has no seat any more, or is suspended. */
-async function tellAsker({ question, asker, lesson, series, answer, by }: Told): Promise<void> {
+async function tellAsker({ question, asker, lesson, series, answer, by }: Told, now: Date): Promise<void> {
   const seat = await Enrolment.findByPk(question.enrolmentId);
   if (seat?.state !== 'active' || asker.suspendedAt !== null) return;
   const workroom = found(await Workroom.findByPk(series.workroomId));
@@ -75,9 +75,9 @@ async function tellAsker({ question, asker, lesson, series, answer, by }: Told):
       asked: question.words,
       answer: answer.words,
       byName: by.name,
+      list: answerList(asker, workroom),
       helpsName: by.userId === teacher.id ? null : teacher.name,
     },
   };
-  if (question.wantsLetter) await postLetter(letter);
-  await putUpLetter(letter, { kind: 'answer', seriesId: series.id, byLetter: question.wantsLetter });
+  await tellAnswer(letter, { to: asker, workroom, seriesId: series.id, kind: 'answer', wantsLetter: question.wantsLetter }, now);
 }
