@@ -12,6 +12,8 @@ export const AskForm = z.object({
   lesson: publicId,
   /** The step it is about; empty for the whole part. */
   step: z.string().max(64).nullish().transform((step) => (step === '' || step === undefined ? null : step)),
+  /** Public id of the photo of hers it is about; empty for none. */
+  photo: z.string().max(26).nullish().transform((photo) => (photo === '' || photo === undefined ? null : photo)),
   words: written('Your question is missing. Write what you see on your loom and what you want to know.', MOST),
   to: z.enum(['teacher', 'class'], { errorMap: () => ({ message: 'Choose who sees it.' }) }),
   letter: ticked,

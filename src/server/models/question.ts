@@ -11,6 +11,8 @@ export class Question extends Model<InferAttributes<Question>, InferCreationAttr
   declare authorId: number;
   /** The step of the part's text it is about; the text may have lost it since. */
   declare stepId: CreationOptional<string | null>;
+  /** The photo of hers it is about. */
+  declare photoId: CreationOptional<number | null>;
   declare words: string;
   declare isForClass: boolean;
   declare wantsLetter: boolean;
@@ -29,6 +31,7 @@ Question.init({
   lessonId: ref(),
   authorId: ref(),
   stepId: maybeText(64),
+  photoId: maybeRef(),
   words: text(2000),
   isForClass: yes(false),
   wantsLetter: yes(false),

@@ -1,7 +1,9 @@
 import { describe, expect, test } from 'vitest';
 import { AskForm } from '#contracts/questions.ts';
-import { Question, type User } from '#server/models/index.ts';
+import { Enrolment, Media, ProgressPhoto, Question, type Lesson, type User } from '#server/models/index.ts';
+import { benchDesk } from '#server/queries/bench/bench-desk.ts';
 import { likeQuestions } from '#server/queries/questions/like-questions.ts';
+import { questionInbox } from '#server/queries/questions/question-inbox.ts';
 import { questionsOn } from '#server/queries/questions/questions-on.ts';
 import { seriesFor } from '#server/queries/series/series-for.ts';
 import { askQuestion } from '#server/use-cases/questions/ask-question.ts';
@@ -16,6 +18,11 @@ async function seen(all: Class, who: User, part = 0): Promise<string[]> {
   const series = await seriesFor(actor, all.series.slug, now);
   const on = series?.parts[part];
   return series === null || on === undefined ? [] : (await questionsOn(actor, series, on)).map(({ words }) => words);
+}
+
+async function photoOf(owner: User, seat: Enrolment, lesson: Lesson): Promise<ProgressPhoto> {
+  const media = await Media.create({ ownerId: owner.id, kind: 'photo', state: 'ready', originalName: 'loom.jpg', width: 4, height: 3, files: {}, detail: {} });
+  return ProgressPhoto.create({ enrolmentId: seat.id, lessonId: lesson.id, mediaId: media.id, createdAt: now });
 }
 
 describe('a question', () => {
@@ -34,6 +41,36 @@ describe('a question', () => {
     const all = await buildClass();
     await expect(ask(all, all.maud, { step: 'no-such-step' })).rejects.toMatchObject({ fields: { step: expect.stringContaining('no longer in the text') } });
     await expect(ask(all, all.maud, { step: 'tie-on' })).resolves.toMatchObject({ stepId: 'tie-on' });
+  });
+
+  test('carries a photo of hers, which she and whoever teaches or helps see, and the class does not', async () => {
+    const all = await buildClass();
+    const lesson = all.parts[1];
+    const photo = await photoOf(all.maud, all.maudsSeat, lesson);
+    const about = { lesson: lesson.publicId, photo: photo.publicId, to: 'class' };
+    const question = await ask(all, all.maud, about);
+    expect((await ask(all, all.maud, { ...about, photo: '' })).id).not.toBe(question.id);
+    const photosSeen = async (who: User): Promise<unknown[]> => {
+      const actor = await actorOf(who);
+      const series = await seriesFor(actor, all.series.slug, now);
+      const on = series?.parts[1];
+      return series === null || on === undefined ? [] : (await questionsOn(actor, series, on)).map((one) => one.photo?.publicId ?? null).toSorted();
+    };
+    for (const who of [all.maud, all.teacher, all.helper]) expect(await photosSeen(who)).toEqual([photo.publicId, null]);
+    expect(await photosSeen(all.jonas)).toEqual([null, null]);
+    expect((await questionInbox(await actorOf(all.teacher))).waiting.map((one) => one.photo?.publicId ?? null)).toEqual([photo.publicId, null]);
+    const { inHand } = await benchDesk(await actorOf(all.teacher), photo.publicId);
+    expect(inHand?.asked).toMatchObject([{ question: question.publicId, photo: photo.publicId, isAnswered: false }]);
+  });
+
+  test('about another’s photo, or one of another part, is refused at its field', async () => {
+    const all = await buildClass();
+    const jonas = await Enrolment.findOne({ where: { userId: all.jonas.id }, rejectOnEmpty: true });
+    const [foreign, elsewhere] = [await photoOf(all.jonas, jonas, all.parts[1]), await photoOf(all.maud, all.maudsSeat, all.parts[0])];
+    for (const photo of [foreign.publicId, elsewhere.publicId, 'nothing']) {
+      await expect(ask(all, all.maud, { lesson: all.parts[1].publicId, photo })).rejects.toMatchObject({ fields: { photo: expect.stringContaining('not among yours') } });
+    }
+    expect(await Question.count()).toBe(0);
   });
 
   test('sent twice is one question, also when both come at once', async () => {

@@ -32,6 +32,7 @@ import { createOwnLooms } from './0032-create-own-looms.ts';
 import { createFinishedPieces } from './0034-create-finished-pieces.ts';
 import { createWallPieces } from './0035-create-wall-pieces.ts';
 import { addAnswerLetters } from './0040-add-answer-letters.ts';
+import { addPhotoOfQuestion } from './0041-add-photo-of-question.ts';
 
 export const migrations: readonly Migration[] = [
   createPeople,
@@ -66,4 +67,5 @@ export const migrations: readonly Migration[] = [
   createFinishedPieces,
   createWallPieces,
   addAnswerLetters,
+  addPhotoOfQuestion,
 ];

@@ -10,6 +10,7 @@ import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { photoThread, type ThreadPhoto, type ThreadShot } from '#server/queries/photos/photo-thread.ts';
 import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
 import { phrasesOfWorkroom } from './phrases-of.ts';
+import { questionsAbout, type AskedAboutPhoto } from './questions-about.ts';
 import { waitingPhotos, type WaitingPhoto } from './waiting-photos.ts';
 
 /** What was said of a photo and taken back: words and pins to go on with. */
@@ -39,6 +40,8 @@ export interface PhotoInHand {
   /** Steps of the part as students read it. */
   readonly steps: readonly StepOfPart[];
   readonly takenBack: TakenBack | null;
+  /** What she asked about her photos of this checkpoint. */
+  readonly asked: readonly AskedAboutPhoto[];
 }
 
 export interface BenchDesk {
@@ -52,19 +55,20 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
   const index = Math.max(0, queue.findIndex(({ publicId }) => publicId === wanted));
   const photo = queue[index];
   if (photo === undefined) return { queue, inHand: null };
-  const [{ pattern, mine }, thread, earlier, phrases, takenBack, steps] = await Promise.all([
+  const [{ pattern, mine }, thread, earlier, phrases, takenBack, steps, asked] = await Promise.all([
     piecesOf(photo.seriesId, photo.enrolmentId),
     photoThread(photo.enrolmentId, photo.lessonId),
     earlierPhotos(photo.enrolmentId, photo.publicId),
     phrasesOfWorkroom(photo.workroomId),
     takenBackOf(actor, photo.publicId),
     stepsOfPart(photo.lessonId),
+    questionsAbout(photo.enrolmentId, photo.lessonId),
   ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   const placeInThread = thread.findIndex(({ publicId }) => publicId === photo.publicId);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps, asked },
   };
 }
 

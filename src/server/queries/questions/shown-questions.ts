@@ -2,6 +2,7 @@
 import { QueryTypes } from 'sequelize';
 import type { Actor } from '#server/context.ts';
 import { sequelize } from '#server/db/sequelize.ts';
+import { worksIn } from '#server/policies/lesson.ts';
 import { mayChangeWords, mayPutBackWords, mayReportWords, mayTakeOutWords, type WordsFacts } from '#server/policies/question.ts';
 
 /** What was taken out can be put back for so long. */
@@ -24,17 +25,26 @@ export interface ShownAnswer extends ShownWords {
   readonly byHelper: boolean;
 }
 
+export interface AskedPhoto {
+  /** Public ids. */
+  readonly publicId: string;
+  readonly mediaId: string;
+  readonly postedAt: Date;
+}
+
 export interface ShownQuestion extends ShownWords {
   readonly isForClass: boolean;
   readonly isAnswered: boolean;
   readonly stepId: string | null;
+  /** The photo it is about, for who asked and whoever teaches or helps there; the class never sees it. */
+  readonly photo: AskedPhoto | null;
   readonly answers: readonly ShownAnswer[];
 }
 
 /** A row of `QUESTION_COLUMNS`. */
 export interface QuestionRow {
   id: number; publicId: string; words: string; stepId: string | null; isForClass: number; authorId: number; byName: string;
-  at: Date; changedAt: Date | null; answeredAt: Date | null; takenOutById: number | null; workroomId: number;
+  at: Date; changedAt: Date | null; answeredAt: Date | null; takenOutById: number | null; workroomId: number; photoId: number | null;
 }
 interface AnswerRow {
   questionId: number; publicId: string; words: string; authorId: number; byName: string; at: Date; changedAt: Date | null; takenOutById: number | null; byHelper: number;
@@ -43,7 +53,7 @@ interface AnswerRow {
 /** Of `questions q`, its author `u` and its series `s`. */
 export const QUESTION_COLUMNS = `
   q.id, q.public_id AS publicId, q.words, q.step_id AS stepId, q.is_for_class AS isForClass, q.author_id AS authorId, u.name AS byName,
-  q.created_at AS at, q.changed_at AS changedAt, q.answered_at AS answeredAt, q.taken_out_by_id AS takenOutById, s.workroom_id AS workroomId`;
+  q.created_at AS at, q.changed_at AS changedAt, q.answered_at AS answeredAt, q.taken_out_by_id AS takenOutById, s.workroom_id AS workroomId, q.photo_id AS photoId`;
 
 /** Words of `row` that stand, or that the person `:me` took out herself and may still put back. */
 export const standsFor = (row: 'q' | 'a'): string => `(${row}.taken_out_at IS NULL OR (${row}.taken_out_by_id = :me AND ${row}.taken_out_at > UTC_TIMESTAMP(3) - INTERVAL ${RECOVERABLE_DAYS} DAY))`;
@@ -63,6 +73,7 @@ export async function withAnswers(actor: Actor, rows: readonly QuestionRow[]): P
       ORDER BY a.created_at, a.id`,
     { replacements: { ids: rows.map(({ id }) => id), me: actor.userId }, type: QueryTypes.SELECT },
   );
+  const photos = await photosOf(rows.filter((row) => row.authorId === actor.userId || worksIn(actor, row.workroomId)));
   return rows.map((row) => {
     const isAnswered = row.answeredAt !== null;
     return {
@@ -70,10 +81,22 @@ export async function withAnswers(actor: Actor, rows: readonly QuestionRow[]): P
       isForClass: row.isForClass === 1,
       isAnswered,
       stepId: row.stepId,
+      photo: photos.get(row.id) ?? null,
       answers: answers.filter(({ questionId }) => questionId === row.id)
         .map((answer) => ({ ...shown(actor, answer, { kind: 'answer', workroomId: row.workroomId, isAnswered }), byHelper: answer.byHelper === 1 })),
     };
   });
+}
+
+async function photosOf(rows: readonly QuestionRow[]): Promise<ReadonlyMap<number, AskedPhoto>> {
+  const ids = rows.flatMap(({ id, photoId }) => (photoId === null ? [] : [id]));
+  if (ids.length === 0) return new Map();
+  const photos = await sequelize.query<AskedPhoto & { questionId: number }>(
+    `SELECT q.id AS questionId, p.public_id AS publicId, m.public_id AS mediaId, p.created_at AS postedAt
+       FROM questions q JOIN progress_photos p ON p.id = q.photo_id JOIN media m ON m.id = p.media_id WHERE q.id IN (:ids)`,
+    { replacements: { ids }, type: QueryTypes.SELECT },
+  );
+  return new Map(photos.map(({ questionId, ...photo }) => [questionId, photo]));
 }
 
 function shown(actor: Actor, row: Pick<AnswerRow, 'publicId' | 'words' | 'authorId' | 'byName' | 'at' | 'changedAt' | 'takenOutById'>, of: Pick<WordsFacts, 'kind' | 'workroomId' | 'isAnswered'>): ShownWords {
