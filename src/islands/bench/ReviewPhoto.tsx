@@ -6,11 +6,12 @@ import { PhotoFrame, type Shown } from '#islands/bench/PhotoFrame.tsx';
 import { Phrases } from '#islands/bench/Phrases.tsx';
 import { PinnedNotes } from '#islands/bench/PinnedNotes.tsx';
 import { Pins } from '#islands/bench/Pins.tsx';
+import { SeeChoice } from '#islands/bench/SeeChoice.tsx';
 import { ShotStrip } from '#islands/bench/ShotStrip.tsx';
 import { useBenchKeys } from '#islands/bench/use-bench-keys.ts';
 import { closer, moved, onPhoto, STEP, turned, WHOLE } from '#islands/bench/view.ts';
 import { ViewBar } from '#islands/bench/ViewBar.tsx';
-import { Select, TextField } from '#islands/ui/Field.tsx';
+import { TextField } from '#islands/ui/Field.tsx';
 import { Glyph } from '#islands/ui/Glyph.tsx';
 import { typedBefore } from '#islands/ui/typed-before.ts';
 
@@ -110,7 +111,7 @@ export function ReviewPhoto({ action, publicId, shots, earlier, studentName, see
           name="words" label={`To ${studentName}`} hint="Goes into the letter, above the notes." error={errors.words} maxLength={2_000} optional
           value={answer.words} onChange={(event) => change({ kind: 'write', words: event.target.value })} onFocus={() => change({ kind: 'choose', index: -1 })}
         />
-        <Select name="see" label="Where it says how to mend it" hint="Goes along with mend first." optional options={[{ value: '', label: 'Nowhere: your words are enough' }, ...sees]} defaultValue={typed.see} />
+        <SeeChoice {...{ sees, alive }} first={typed.see} />
         <Phrases {...{ phrases, answer, change, studentName }} />
         <div className="verdict">
           <button type="submit" name="verdict" value="weave-on" className="btn btn-on" aria-keyshortcuts="W"><Glyph name="on" />Weave on <span className="key only-desk" aria-hidden="true">W</span></button>

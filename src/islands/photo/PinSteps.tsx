@@ -27,7 +27,7 @@ export function PinSteps({ photo, notes }: PinStepsProps) {
   const [live, setLive] = useState(false);
   const [at, setAt] = useState(0);
   useEffect(() => setLive(true), []);
-  const pinOf = useCallback((number: number) => document.querySelector<SVGAElement>(`#${CSS.escape(photo)} a[href="#${photo}-note-${number}"]`), [photo]);
+  const pinOf = useCallback((number: number) => document.getElementById(photo)?.querySelector<SVGAElement>(`a[href="#${photo}-note-${number}"]`) ?? null, [photo]);
   const go = useCallback((number: number) => {
     setAt(number);
     pinOf(number)?.focus();

@@ -1,6 +1,7 @@
 // @vitest-environment jsdom
 import { cleanup, fireEvent, render, screen } from '@testing-library/react';
 import userEvent from '@testing-library/user-event';
+import { renderToString } from 'react-dom/server';
 import { afterEach, beforeEach, describe, expect, test, vi } from 'vitest';
 import { ReviewPhoto, type ReviewPhotoProps } from '#islands/bench/ReviewPhoto.tsx';
 
@@ -44,6 +45,26 @@ function bench(given: Partial<ReviewPhotoProps> = {}) {
 const words = () => screen.getByRole<HTMLTextAreaElement>('textbox', { name: /^To Maud/ });
 const pins = () => screen.queryAllByRole('button', { name: /^Note \d: move/ });
 const press = (keys: string) => userEvent.keyboard(keys);
+
+describe('where it says how to mend it', () => {
+  const many = Array.from({ length: 20 }, (_, index) => ({ value: `fault:f${index}`, label: index === 7 ? 'Handbook: A slit gapes' : `Handbook: Fault ${index}` }));
+
+  test('stands chosen from the start, and is found by typing where there are many', async () => {
+    bench({ sees: many, typed: { words: '', notes: [], see: 'fault:f3' } });
+    const combo = screen.getByRole<HTMLInputElement>('combobox', { name: /^Where it says/ });
+    expect(combo.value).toBe('Handbook: Fault 3');
+    await userEvent.click(combo);
+    await press('slit{Enter}');
+    await userEvent.click(screen.getByRole('button', { name: /^Mend first/ }));
+    expect(sent[0]).toMatchObject({ see: 'fault:f7', verdict: 'mend-first' });
+  });
+
+  test('is a list where no script runs, however many there are', () => {
+    const drawn = renderToString(<ReviewPhoto action="" publicId="one" shots={[{ src: '/p.webp', width: 600, height: 400, alt: 'Photo by Maud' }]} earlier={[]} studentName="Maud" sees={many} phrases={[]} typed={{ words: '', notes: [], see: 'fault:f3' }} errors={{}} next={null} before={null} after={null} />);
+    expect(drawn).toContain('<option value="fault:f3" selected="">');
+    expect(drawn).not.toContain('combobox');
+  });
+});
 
 describe('by keys alone', () => {
   test('W says weave on of this photo, with the phrases put in, and names the one that comes next', async () => {

@@ -1,11 +1,13 @@
 /** What lies on the bench: the queue, and for the photo in hand the student's plan and her earlier photos. */
 import { fitPiece } from '#core/craft/fit.ts';
 import type { FittedPiece } from '#core/craft/fit.ts';
+import { techniquesOfPart } from '#core/following/techniques-of-part.ts';
+import type { TechniqueName } from '#core/craft/piece.ts';
 import type { StepOfPart } from '#core/following/see-to-mend.ts';
 import type { NoteInput } from '#contracts/bench.ts';
 import type { Actor } from '#server/context.ts';
 import { HeldVerdict, ProgressPhoto, User } from '#server/models/index.ts';
-import { stepsOfPart } from '#server/queries/lessons/steps-of-part.ts';
+import { factsOfPart } from '#server/queries/lessons/facts-of-part.ts';
 import { piecesOf } from '#server/queries/pieces/pieces-of.ts';
 import { photoThread, type ThreadPhoto, type ThreadShot } from '#server/queries/photos/photo-thread.ts';
 import { earlierPhotos, type EarlierPhoto } from './earlier-photos.ts';
@@ -39,6 +41,7 @@ export interface PhotoInHand {
   readonly phrases: readonly string[];
   /** Steps of the part as students read it. */
   readonly steps: readonly StepOfPart[];
+  readonly techniques: readonly TechniqueName[];
   readonly takenBack: TakenBack | null;
   /** What she asked about her photos of this checkpoint. */
   readonly asked: readonly AskedAboutPhoto[];
@@ -55,20 +58,20 @@ export async function benchDesk(actor: Actor, wanted: string | null): Promise<Be
   const index = Math.max(0, queue.findIndex(({ publicId }) => publicId === wanted));
   const photo = queue[index];
   if (photo === undefined) return { queue, inHand: null };
-  const [{ pattern, mine }, thread, earlier, phrases, takenBack, steps, asked] = await Promise.all([
+  const [{ pattern, mine }, thread, earlier, phrases, takenBack, facts, asked] = await Promise.all([
     piecesOf(photo.seriesId, photo.enrolmentId),
     photoThread(photo.enrolmentId, photo.lessonId),
     earlierPhotos(photo.enrolmentId, photo.publicId),
     phrasesOfWorkroom(photo.workroomId),
     takenBackOf(actor, photo.publicId),
-    stepsOfPart(photo.lessonId),
+    factsOfPart(photo.lessonId),
     questionsAbout(photo.enrolmentId, photo.lessonId),
   ]);
   const fitted = pattern === null ? null : fitPiece(pattern, mine, actor.units);
   const placeInThread = thread.findIndex(({ publicId }) => publicId === photo.publicId);
   return {
     queue,
-    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps, asked },
+    inHand: { photo, before: queue[index - 1] ?? null, after: queue[index + 1] ?? null, fitted: fitted?.ok === true ? fitted.value : null, thread, placeInThread, shots: thread[placeInThread]?.shots ?? [], earlier, phrases, takenBack, steps: facts?.steps ?? [], techniques: techniquesOfPart(pattern, facts?.amounts ?? []), asked },
   };
 }
 

@@ -7,7 +7,7 @@ import { found } from '#server/errors.ts';
 import type { LetterTo } from '#server/mail/outbox.ts';
 import { Enrolment, HeldVerdict, Lesson, PartOpening, PhotoNote, ProgressPhoto, Series, User, Workroom } from '#server/models/index.ts';
 import { answerList, tellAnswer } from '#server/notices/tell-answer.ts';
-import { stepsOfPart } from '#server/queries/lessons/steps-of-part.ts';
+import { factsOfPart } from '#server/queries/lessons/facts-of-part.ts';
 
 /** A verdict as it was said, `round` telling which time. */
 export interface SaidVerdict {
@@ -43,7 +43,7 @@ async function tellStudent(photo: ProgressPhoto, { verdict, words, notes, see, b
   const lessons = await Lesson.findAll({ where: { seriesId: series.id, takenOutAt: null, publishedVersionId: { [Op.ne]: null } }, order: ['position', 'id'] });
   const partNumber = lessons.findIndex(({ id }) => id === photo.lessonId) + 1;
   const opened = verdict === 'weave-on' ? await openedBy(photo, lessons) : [];
-  const how = see === null ? null : seeToMend(see, await stepsOfPart(photo.lessonId));
+  const how = see === null ? null : seeToMend(see, (await factsOfPart(photo.lessonId))?.steps ?? []);
   const letter: LetterTo<'verdict'> = {
     template: 'verdict',
     dedupeKey: `verdict:${photo.publicId}`,

@@ -24,8 +24,8 @@ export function refuse(
     if (name.startsWith('content-') || name === 'etag') response.removeHeader(name);
   }
   const title = STATUS_CODES[status] ?? 'Refused';
-  const forPeople = !pathOf(request).startsWith('/api/') && (request.headers.accept ?? '').includes('text/html');
-  const body = Buffer.from(forPeople ? page(title, sentence) : JSON.stringify({ type: 'about:blank', title, status, detail: sentence }));
+  const forPeople = (!pathOf(request).startsWith('/api/') || carriesForm(request)) && (request.headers.accept ?? '').includes('text/html');
+  const body = Buffer.from(forPeople ? page(status, title, sentence) : JSON.stringify({ type: 'about:blank', title, status, detail: sentence }));
   response.setHeader('Content-Type', forPeople ? 'text/html; charset=utf-8' : 'application/problem+json; charset=utf-8');
   response.setHeader('Content-Length', body.length);
   response.setHeader('Content-Security-Policy', "default-src 'none'; frame-ancestors 'none'");
@@ -56,6 +56,11 @@ function bodyIsArriving(request: IncomingMessage): boolean {
   return request.headers['transfer-encoding'] !== undefined || (request.headers['content-length'] ?? '0') !== '0';
 }
 
-function page(title: string, sentence: string): string {
-  return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width"><title>${title}</title></head><body><main><h1>${title}</h1><p>${sentence}</p><p><a href="/">To the first page</a></p></main></body></html>`;
+/** A form without script posts to an endpoint too, and its browser shows what comes back. */
+function carriesForm(request: IncomingMessage): boolean {
+  return /^(?:multipart\/form-data|application\/x-www-form-urlencoded)\b/i.test(request.headers['content-type'] ?? '');
+}
+
+function page(status: number, title: string, sentence: string): string {
+  return `<!doctype html><html lang="en"><head><meta charset="utf-8"><meta name="viewport" content="width=device-width"><title>${title}</title></head><body><main><h1>${title}</h1><p>${sentence}</p>${status === 413 ? '<p>Go back, choose less, and send it again. Nothing you made here is lost.</p>' : ''}<p><a href="/">To the first page</a></p></main></body></html>`;
 }

@@ -1,5 +1,5 @@
 import { connect } from 'node:net';
-import type { IncomingMessage } from 'node:http';
+import { request, type IncomingMessage } from 'node:http';
 import { afterEach, beforeEach, describe, expect, test } from 'vitest';
 import { startFront, type RunningFront } from '../../../support/front.ts';
 
@@ -20,8 +20,8 @@ async function bodyOf(request: IncomingMessage): Promise<number | string> {
 beforeEach(async () => {
   read = Promise.resolve('never asked');
   front = await startFront({
-    site: (request, response) => {
-      read = bodyOf(request);
+    site: (asked, response) => {
+      read = bodyOf(asked);
       void read.then((bytes) => {
         response.writeHead(200, { 'Content-Type': 'text/plain' });
         response.end(String(bytes));
@@ -48,6 +48,25 @@ describe('a body', () => {
     expect(counted.status).toBe(status);
     if (status === 200) expect(counted.text).toBe(String(bytes));
     else expect(JSON.parse(counted.text)).toMatchObject({ status: 413, detail: expect.stringContaining('larger than') as unknown });
+  });
+
+  test('of photos beyond what a form may carry is refused with a page for a browser, and in JSON for a program', async () => {
+    const refused = async (accept: string): Promise<{ type: string | undefined; text: string }> => new Promise((resolve, reject) => {
+      // The browser goes on sending while the answer is on its way, and must get it all the same.
+      const asking = request({ port: front.port, host: '127.0.0.1', path: '/api/photos', method: 'POST', headers: { Host: 'loom.example', Accept: accept, 'Content-Type': 'multipart/form-data; boundary=x', 'Content-Length': String(152 * MIB) } }, (answer) => {
+        let text = '';
+        answer.setEncoding('utf8').on('data', (words: string) => { text += words; }).on('end', () => { resolve({ type: answer.headers['content-type'], text }); });
+      });
+      asking.once('error', reject);
+      for (let sent = 0; sent < 8; sent += 1) asking.write(Buffer.alloc(MIB));
+    });
+    const page = await refused('text/html,application/xhtml+xml,*/*;q=0.8');
+    expect(page.type).toBe('text/html; charset=utf-8');
+    expect(page.text).toContain('<p>This is larger than 151 MB, the most that is taken here.</p><p>Go back, choose less');
+    const problem = await refused('*/*');
+    expect(problem.type).toBe('application/problem+json; charset=utf-8');
+    expect(JSON.parse(problem.text)).toMatchObject({ status: 413 });
+    expect(await read).toBe('never asked');
   });
 
   test('over the limit is never taken in part', async () => {
