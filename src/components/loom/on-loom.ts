@@ -1,10 +1,9 @@
 // A seat as cloth: the piece, how much of it is woven, and where each part lies on it.
 import type { ClothPiece, WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
-import { spreadOverParts, type PartStretch } from '#core/craft/cloth/parts-strip.ts';
+import type { PartStretch } from '#core/craft/cloth/parts-strip.ts';
 import { clothOf } from '#core/craft/cloth-of.ts';
 import { madeFor, type MadeFor } from '#core/craft/made-for.ts';
-import { stretchesOf } from '#core/following/bands-by-part.ts';
-import { countedShare } from '#core/following/counted-bands.ts';
+import { countedCloth } from '#core/following/counted-cloth.ts';
 import { fellOf, howFar, type HowFar } from '#core/following/progress.ts';
 import { titleHalves } from '#core/series/title.ts';
 import type { Units } from '#core/units/units.ts';
@@ -26,9 +25,8 @@ export function clothOnLoom(seat: SeatOnLoom, units: Units): ClothOnLoom {
   const { name } = titleHalves(seat.title);
   const piece = made && clothOf(made.piece, made.plan, name);
   if (made === null || piece?.kind !== 'woven') return { made, far, piece, woven: far.inHand === undefined ? 1 : 0, stretches: [] };
-  const stretches = stretchesOf(made.piece, seat.parts.map(({ amountKeys }) => amountKeys)) ?? spreadOverParts(piece, seat.parts.length);
-  const heights = piece.bands.map(({ heightMm }) => heightMm);
-  const { share: woven, ...fell } = fellOf(seat.parts, stretches, heights, countedShare(made, seat.counts, seat.woven));
+  const { stretches, heights, counted } = countedCloth(made, piece, seat.parts.map(({ amountKeys }) => amountKeys), seat.counts, seat.woven);
+  const { share: woven, ...fell } = fellOf(seat.parts, stretches, heights, counted);
   return { made, far: fell, piece, stretches, woven };
 }
 

@@ -86,11 +86,24 @@ export function fellOf(parts: readonly PartInHand[], stretches: readonly PartStr
   const far = howFar(parts);
   const { inHand } = far;
   if (inHand === undefined) return { ...far, share: 1 };
-  const at = parts.indexOf(inHand);
+  const allTicked = stepsDone(inHand) === inHand.steps.length;
+  return { inHand, ...fellInHand({ at: parts.indexOf(inHand), done: far.done, allTicked }, stretches, heights, counted) };
+}
+
+/**
+ * The same, of a part in hand whose steps were counted already.
+ * @param inHand its place from 0, the parts done with the share of its steps, and whether all of them are ticked
+ */
+export function fellInHand(
+  { at, done, allTicked }: { readonly at: number; readonly done: number; readonly allTicked: boolean },
+  stretches: readonly PartStretch[],
+  heights: readonly number[],
+  counted: number,
+): Omit<Fell, 'inHand'> {
   const floor = wovenShare(at, stretches, heights);
-  const ticked = wovenShare(far.done, stretches, heights);
-  if (counted <= floor) return { ...far, share: ticked };
-  const share = stepsDone(inHand) === inHand.steps.length ? Math.max(counted, ticked) : counted;
+  const ticked = wovenShare(done, stretches, heights);
+  if (counted <= floor) return { done, share: ticked };
+  const share = allTicked ? Math.max(counted, ticked) : counted;
   const own = wovenShare(at + 1, stretches, heights) - floor;
-  return { inHand, share, done: own === 0 ? far.done : at + Math.min(MOST_IN_HAND, (share - floor) / own) };
+  return { share, done: own === 0 ? done : at + Math.min(MOST_IN_HAND, (share - floor) / own) };
 }

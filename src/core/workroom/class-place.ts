@@ -1,5 +1,6 @@
 /** Where the students of a series are, as their teacher sees it: part, fell line, and for how long nothing has moved. */
-import { isDone, type Verdict } from '#core/following/progress.ts';
+import type { CountedCloth } from '#core/following/counted-cloth.ts';
+import { fellInHand, isDone, type Verdict } from '#core/following/progress.ts';
 
 /** What one student has done of one part. */
 export interface PartOfOne {
@@ -23,12 +24,18 @@ export interface ClassPlace {
 /** All steps ticked is not yet done: the last look is missing. */
 const ALMOST = 0.96;
 
-export function classPlace(parts: readonly PartOfOne[]): ClassPlace {
+/**
+ * The rows she counted say how far she is in the part in hand, as they do on her own loom.
+ * @param cloth null where she counted none, or her piece is not woven in bands: then the steps she ticked say it
+ */
+export function classPlace(parts: readonly PartOfOne[], cloth: CountedCloth | null): ClassPlace {
   const at = parts.findIndex((part) => !isDone(part));
   const part = parts[at];
   if (part === undefined) return { at: undefined, done: parts.length, verdict: null };
   const share = part.steps === 0 ? 0 : Math.min(ALMOST, part.ticked / part.steps);
-  return { at, done: at + share, verdict: part.verdict };
+  const ticked = at + share;
+  const done = cloth === null ? ticked : fellInHand({ at, done: ticked, allTicked: part.ticked >= part.steps }, cloth.stretches, cloth.heights, cloth.counted).done;
+  return { at, done, verdict: part.verdict };
 }
 
 export const DAY_MS = 86_400_000;

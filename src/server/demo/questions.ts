@@ -7,7 +7,7 @@ import { askQuestion } from '#server/use-cases/questions/ask-question.ts';
 export async function askAndAnswer(series: Series, { maud, jonas, wren }: { readonly maud: User; readonly jonas: User; readonly wren: User }): Promise<void> {
   const [first, second] = await Lesson.findAll({ where: { seriesId: series.id }, order: ['position'], limit: 2 });
   if (first === undefined || second === undefined) throw new RangeError('the series has fewer than two parts');
-  const asked = { series: series.slug, step: null, letter: false, looked: true };
+  const asked = { series: series.slug, step: null, photo: null, letter: false, looked: true };
   const { publicId } = await askQuestion(await actingAs(maud), {
     ...asked, lesson: first.publicId, to: 'class',
     words: 'My nails stand 8 mm apart, not 6. Does the wool still fill the rows, or do I need a thicker one?',

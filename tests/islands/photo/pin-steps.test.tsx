@@ -18,7 +18,7 @@ const pin = (number: number): Element | null => document.querySelector(`a[href="
 const focusOn = (number: number): void => { act(() => document.querySelector<SVGAElement>(`a[href="#photo-1-note-${number}"]`)?.focus()); };
 const said = (): string | null => screen.getByRole('status').textContent;
 const current = (): (string | null)[] => [...document.querySelectorAll('[aria-current]')].map(({ textContent }) => textContent);
-const press = (keys: string): Promise<void> => userEvent.keyboard(keys);
+const press = (keys: string): Promise<unknown> => userEvent.keyboard(keys);
 
 describe('the notes on a photo', () => {
   test('are counted before one is chosen', () => {

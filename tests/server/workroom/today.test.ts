@@ -1,6 +1,6 @@
 import { describe, expect, test } from 'vitest';
 import { sequelize, statementListeners } from '#server/db/sequelize.ts';
-import { LedgerEntry, LessonVisit, Media, Order, PatternPiece, ProgressPhoto, Tick, WorkroomHelper, type Enrolment, type Lesson, type Series, type User } from '#server/models/index.ts';
+import { LedgerEntry, LessonVisit, Media, Order, PatternPiece, ProgressPhoto, RowTally, Tick, WorkroomHelper, type Enrolment, type Lesson, type Series, type User } from '#server/models/index.ts';
 import { classOf } from '#server/queries/workroom/class-of.ts';
 import { ledgerSince } from '#server/queries/workroom/ledger.ts';
 import { lastMonday, today } from '#server/queries/workroom/today.ts';
@@ -69,6 +69,25 @@ describe('where a class is', () => {
     await Tick.create({ enrolmentId: own.id, subject: 'step', itemKey: `${gather.publicId}:a`, isTicked: true, changedAt: day('11-25') });
     await Tick.create({ enrolmentId: own.id, subject: 'step', itemKey: `${gather.publicId}:b`, isTicked: false, changedAt: day('11-25') });
     expect((await classOf([series.workroomId]))[0]?.students[0]?.done).toBe(0.5);
+  });
+
+  test('counts rows at the loom as the share of the part in hand, and as a step', async () => {
+    const { series, parts: [gather, dress, weave] } = await scene();
+    const own = await seat(series, 'Maud');
+    await LessonVisit.bulkCreate([gather, dress].map(({ id }) => ({ enrolmentId: own.id, lessonId: id, finishedAt: day('11-12') })));
+    const piece = await lowTide();
+    await PatternPiece.destroy({ where: { seriesId: series.id } });
+    await PatternPiece.create({ seriesId: series.id, data: piece, revision: 1 });
+    const place = async () => (await classOf([series.workroomId]))[0]?.students[0];
+    const before = await place();
+    await sequelize.query(`UPDATE lesson_versions SET facts = JSON_SET(facts, '$.amounts', JSON_ARRAY(${piece.bands.map(({ name }) => `'band.${name ?? ''}.rows'`).join(',')})) WHERE lesson_id = ${String(weave.id)}`);
+    await RowTally.create({ enrolmentId: own.id, bandKey: piece.bands[1]?.name ?? '', device: 'a', counted: 3, version: 1 });
+    const after = await place();
+    expect([before?.at, after?.at]).toEqual([2, 2]);
+    expect(before?.done).toBe(2);
+    expect(after?.done).toBeGreaterThan(2);
+    expect(after?.done).toBeLessThan(3);
+    expect(after?.lastStepAt.getTime()).toBeGreaterThan(before?.lastStepAt.getTime() ?? 0);
   });
 
   test('leaves out seats that were closed, parts taken out, and other workrooms', async () => {

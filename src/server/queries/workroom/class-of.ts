@@ -1,7 +1,14 @@
 /** The series of one or several workrooms with everybody who has a seat, and where each of them is. Always five statements. */
 import { QueryTypes } from 'sequelize';
+import { wovenOf } from '#core/craft/cloth-of.ts';
 import type { Piece } from '#core/craft/crafts.ts';
+import type { MyPiece } from '#core/craft/fit.ts';
+import { madeFor } from '#core/craft/made-for.ts';
+import { NOTHING_WOVEN, type WovenSoFar } from '#core/craft/rest/woven-so-far.ts';
+import { countedCloth, type CountedCloth } from '#core/following/counted-cloth.ts';
 import type { Verdict } from '#core/following/progress.ts';
+import { rowsOf, type RowCounts } from '#core/following/row-count.ts';
+import type { Units } from '#core/units/units.ts';
 import { classPlace, type PartOfOne } from '#core/workroom/class-place.ts';
 import { sequelize } from '#server/db/sequelize.ts';
 
@@ -52,10 +59,12 @@ interface PartRow {
 }
 interface SeatRow {
   readonly id: number; readonly seat: string; readonly seriesId: number; readonly name: string; readonly startedAt: Date; readonly source: ClassStudent['source'];
-  readonly tickedAt: Date | null; readonly shownAt: Date | null; readonly finishedAt: Date | null; readonly nudgedAt: Date | null;
+  readonly tickedAt: Date | null; readonly shownAt: Date | null; readonly finishedAt: Date | null; readonly countedAt: Date | null; readonly nudgedAt: Date | null;
+  readonly units: Units; readonly mine: MyPiece | null; readonly woven: WovenSoFar | null;
 }
 interface MarkRow { readonly enrolmentId: number; readonly lessonId: number; readonly isFinished: number; readonly verdict: Verdict | null }
-interface TickRow { readonly enrolmentId: number; readonly part: string; readonly ticked: number }
+/** Steps ticked of a part, by its public id; or rows that one device counted in a band, by the band's key. */
+interface CountRow { readonly enrolmentId: number; readonly of: 'steps' | 'rows'; readonly key: string; readonly counted: number }
 
 const SERIES = `
   SELECT s.id, s.slug, s.title, s.state, s.published_at AS publishedAt, s.price_minor AS priceMinor, s.currency, s.workroom_id AS workroomId, p.data AS piece
@@ -71,12 +80,13 @@ const PARTS = `
    ORDER BY l.series_id, l.position, l.id`;
 
 const SEATS = `
-  SELECT e.id, e.public_id AS seat, e.series_id AS seriesId, u.name, e.started_at AS startedAt, e.source,
+  SELECT e.id, e.public_id AS seat, e.series_id AS seriesId, u.name, e.started_at AS startedAt, e.source, u.units, m.data AS mine, m.woven,
          (SELECT MAX(t.changed_at) FROM ticks t WHERE t.enrolment_id = e.id) AS tickedAt,
          (SELECT MAX(p.created_at) FROM progress_photos p WHERE p.enrolment_id = e.id) AS shownAt,
          (SELECT MAX(v.finished_at) FROM lesson_visits v WHERE v.enrolment_id = e.id) AS finishedAt,
+         (SELECT MAX(r.updated_at) FROM row_tallies r WHERE r.enrolment_id = e.id) AS countedAt,
          (SELECT MAX(n.sent_at) FROM notice_receipts r JOIN notices n ON n.id = r.notice_id WHERE r.user_id = e.user_id AND n.workroom_id = s.workroom_id AND n.kind = 'nudge') AS nudgedAt
-    FROM enrolments e JOIN series s ON s.id = e.series_id JOIN users u ON u.id = e.user_id
+    FROM enrolments e JOIN series s ON s.id = e.series_id JOIN users u ON u.id = e.user_id LEFT JOIN my_pieces m ON m.enrolment_id = e.id
    WHERE s.workroom_id IN (:workrooms) AND e.state = 'active'
    ORDER BY e.started_at DESC, e.id DESC`;
 
@@ -94,24 +104,29 @@ const MARKS = `
    GROUP BY m.enrolmentId, m.lessonId`;
 
 /** A step's key begins with the public id of its part. */
-const TICKS = `
-  SELECT t.enrolment_id AS enrolmentId, SUBSTRING_INDEX(t.item_key, ':', 1) AS part, COUNT(*) AS ticked
+const COUNTS = `
+  SELECT t.enrolment_id AS enrolmentId, 'steps' AS \`of\`, SUBSTRING_INDEX(t.item_key, ':', 1) AS \`key\`, COUNT(*) AS counted
     FROM ticks t JOIN enrolments e ON e.id = t.enrolment_id AND e.state = 'active' JOIN series s ON s.id = e.series_id
    WHERE s.workroom_id IN (:workrooms) AND t.subject = 'step' AND t.is_ticked = 1
-   GROUP BY t.enrolment_id, part`;
+   GROUP BY t.enrolment_id, \`key\`
+  UNION ALL
+  SELECT r.enrolment_id, 'rows', r.band_key, r.counted
+    FROM row_tallies r JOIN enrolments e ON e.id = r.enrolment_id AND e.state = 'active' JOIN series s ON s.id = e.series_id
+   WHERE s.workroom_id IN (:workrooms)`;
 
 export async function classOf(workrooms: readonly number[]): Promise<ClassSeries[]> {
   if (workrooms.length === 0) return [];
   const asked = { replacements: { workrooms: [...workrooms] }, type: QueryTypes.SELECT } as const;
-  const [series, parts, seats, marks, ticks] = await Promise.all([
+  const [series, parts, seats, marks, counts] = await Promise.all([
     sequelize.query<SeriesRow>(SERIES, asked),
     sequelize.query<PartRow>(PARTS, asked),
     sequelize.query<SeatRow>(SEATS, asked),
     sequelize.query<MarkRow>(MARKS, asked),
-    sequelize.query<TickRow>(TICKS, asked),
+    sequelize.query<CountRow>(COUNTS, asked),
   ]);
   const markOf = new Map(marks.map((mark) => [`${mark.enrolmentId}:${mark.lessonId}`, mark]));
-  const tickedOf = new Map(ticks.map(({ enrolmentId, part, ticked }) => [`${enrolmentId}:${part}`, ticked]));
+  const tickedOf = new Map(counts.filter((count) => count.of === 'steps').map(({ enrolmentId, key, counted }) => [`${enrolmentId}:${key}`, counted]));
+  const rows = counts.filter((count) => count.of === 'rows');
   return series.map((one) => {
     const own = parts.filter(({ seriesId }) => seriesId === one.id);
     const shown = one.state === 'published' ? own.filter(({ isPublished }) => isPublished === 1) : own;
@@ -119,15 +134,30 @@ export async function classOf(workrooms: readonly number[]): Promise<ClassSeries
       const mark = markOf.get(`${seat.id}:${part.id}`);
       return { isFinished: mark?.isFinished === 1, verdict: mark?.verdict ?? null, steps: part.steps ?? 0, ticked: tickedOf.get(`${seat.id}:${part.publicId}`) ?? 0 };
     };
+    const amountKeys = shown.map((part) => part.amountKeys ?? []);
     return {
       ...one,
       parts: shown.map(({ id, title, opensAt, amountKeys }, index) => ({ id, number: index + 1, title, opensAt, amountKeys: amountKeys ?? [] })),
-      students: seats.filter(({ seriesId }) => seriesId === one.id).map((seat) => studentOf(seat, shown.map((part) => partOf(seat, part)))),
+      students: seats.filter(({ seriesId }) => seriesId === one.id).map((seat) => studentOf(seat, shown.map((part) => partOf(seat, part)), clothOf(seat, one.piece, amountKeys, rowsCountedBy(seat.id, rows)))),
     };
   });
 }
 
-function studentOf({ seat, name, seriesId, startedAt, source, tickedAt, shownAt, finishedAt, nudgedAt }: SeatRow, parts: readonly PartOfOne[]): ClassStudent {
-  const steps = [startedAt, tickedAt, shownAt, finishedAt].filter((moment): moment is Date => moment !== null);
-  return { seat, name, seriesId, startedAt, source, ...classPlace(parts), lastStepAt: new Date(Math.max(...steps.map((moment) => moment.getTime()))), nudgedAt };
+function rowsCountedBy(seat: number, rows: readonly CountRow[]): RowCounts {
+  const own = rows.filter(({ enrolmentId }) => enrolmentId === seat);
+  return Object.fromEntries([...new Set(own.map(({ key }) => key))].map((key) => [key, rowsOf(own.filter((row) => row.key === key).map(({ counted }) => counted))]));
+}
+
+/** Null where nothing was counted: only who counts rows has her piece reckoned here. */
+function clothOf({ mine, units, woven }: SeatRow, pattern: Piece | null, amountKeys: readonly (readonly string[])[], counts: RowCounts): CountedCloth | null {
+  const said = woven ?? NOTHING_WOVEN;
+  if (pattern === null || (Object.keys(counts).length === 0 && said.bandsDone === 0 && (said.rows ?? 0) === 0)) return null;
+  const made = madeFor(pattern, mine ?? {}, units, said);
+  const cloth = made && wovenOf(made.piece, made.plan, '');
+  return made && cloth && countedCloth(made, cloth, amountKeys, counts, said);
+}
+
+function studentOf({ seat, name, seriesId, startedAt, source, tickedAt, shownAt, finishedAt, countedAt, nudgedAt }: SeatRow, parts: readonly PartOfOne[], cloth: CountedCloth | null): ClassStudent {
+  const steps = [startedAt, tickedAt, shownAt, finishedAt, countedAt].filter((moment): moment is Date => moment !== null);
+  return { seat, name, seriesId, startedAt, source, ...classPlace(parts, cloth), lastStepAt: new Date(Math.max(...steps.map((moment) => moment.getTime()))), nudgedAt };
 }

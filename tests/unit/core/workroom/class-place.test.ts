@@ -17,7 +17,16 @@ describe('a student’s place in the class', () => {
     ['all done', [part({ isFinished: true }), part({ verdict: 'weave-on' })], { at: undefined, done: 2, verdict: null }],
     ['a part without steps', [part({ steps: 0 })], { at: 0, done: 0, verdict: null }],
   ] as const)('%s', (_words, parts, place) => {
-    expect(classPlace(parts)).toEqual(place);
+    expect(classPlace(parts, null)).toEqual(place);
+  });
+
+  test('follows the rows she counted in the part in hand, and never makes it whole', () => {
+    const cloth = (counted: number) => ({ stretches: [{ bands: [0] }, { bands: [1] }], heights: [100, 300], counted });
+    const parts = [part({ isFinished: true }), part({ ticked: 1 })];
+    expect(classPlace(parts, cloth(0.625)).done).toBe(1.5);
+    expect(classPlace(parts, cloth(1)).done).toBe(1.96);
+    // Counted only in what is done already: the steps say it.
+    expect(classPlace(parts, cloth(0.2)).done).toBe(1.25);
   });
 
   test('counts who moves and who stands still, at each part', () => {
