@@ -58,8 +58,9 @@ async function gather({ title, blocks, act }: Said, to: User, workroom: Workroom
       return;
     }
     if (waiting.state === 'ready' && waiting.attempts === 0) {
-      const before = waiting.data['answers'];
-      await waiting.update({ data: { ...waiting.data, answers: [...(Array.isArray(before) ? before : []), answer] } });
+      const kept = waiting.data['answers'];
+      const earlier: readonly unknown[] = Array.isArray(kept) ? kept : [];
+      await waiting.update({ data: { ...waiting.data, answers: [...earlier, answer] } });
       return;
     }
   }
