@@ -1,26 +1,7 @@
-import { DataTypes, Model, type CreationOptional, type InferAttributes, type InferCreationAttributes } from 'sequelize';
-import { maybeMoment, maybeText, moment, ref, yes } from '#server/db/columns.ts';
 import { sequelize } from '#server/db/sequelize.ts';
+import { Arriving, arrivingColumns } from './_arriving.ts';
 
-/** A video that is still arriving: what was promised, and which process is writing its bytes just now. */
-export class VideoUpload extends Model<InferAttributes<VideoUpload>, InferCreationAttributes<VideoUpload>> {
-  declare mediaId: number;
-  /** As promised; how much has come is what lies on the disk. */
-  declare byteCount: number;
-  /** Who holds it for writing, until when, and whether another request waits for it. */
-  declare heldBy: CreationOptional<string | null>;
-  declare heldUntil: CreationOptional<Date | null>;
-  declare isWanted: CreationOptional<boolean>;
-  declare createdAt: CreationOptional<Date>;
-  declare updatedAt: CreationOptional<Date>;
-}
+/** A video that is still arriving. */
+export class VideoUpload extends Arriving {}
 
-VideoUpload.init({
-  mediaId: { ...ref(), primaryKey: true },
-  byteCount: { type: DataTypes.BIGINT, allowNull: false },
-  heldBy: maybeText(64),
-  heldUntil: maybeMoment(),
-  isWanted: yes(false),
-  createdAt: moment(),
-  updatedAt: moment(),
-}, { sequelize, tableName: 'video_uploads' });
+VideoUpload.init(arrivingColumns(), { sequelize, tableName: 'video_uploads' });
