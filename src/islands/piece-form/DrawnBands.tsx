@@ -1,6 +1,6 @@
-import { memo, useCallback, useEffect, useId, useMemo, useRef, type KeyboardEvent, type PointerEvent, type SVGProps } from 'react';
+import { useEffect, useId, useMemo, useRef, type KeyboardEvent, type PointerEvent, type RefObject } from 'react';
 import { lengthOf } from '#core/craft/amounts/amount-types.ts';
-import { placeOfBand, type ClothBox } from '#core/craft/cloth/cloth-box.ts';
+import type { ClothBox } from '#core/craft/cloth/cloth-box.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import { fillingBand, holdBand, withinHold, type HeldBand } from '#core/craft/piece-form/band-height.ts';
 import type { FrameLoomPiece } from '#core/craft/piece.ts';
@@ -9,6 +9,11 @@ import { amountText } from '#core/units/format-amount.ts';
 import { glyphs } from '#islands/ui/glyphs.ts';
 import { useHands, useShown } from './hands.ts';
 import { useRowDrag } from './use-row-drag.ts';
+
+export interface Place {
+  readonly top: number;
+  readonly height: number;
+}
 
 export interface DrawnMade {
   readonly piece: FrameLoomPiece;
@@ -23,7 +28,10 @@ interface DrawnBandsProps {
   readonly pictureHeight: number;
   /** Place of the chosen band; −1 for none. */
   readonly chosen: number;
-  readonly onChoose: (index: number) => void;
+  /** Of each band, from the upper edge of the cloth. */
+  readonly places: readonly Place[];
+  /** Gets the chosen band's square. */
+  readonly square: RefObject<SVGGElement | null>;
   readonly onPull: (held: HeldBand, steps: number) => void;
   readonly onRest: () => void;
 }
@@ -34,13 +42,11 @@ const MARGIN = 14;
 const REACH = 44;
 const LEAP = 10;
 
-/** Over the drawn piece: a press chooses a band; the chosen one is pulled to another height at its square, to another place at its dots. */
-export function DrawnBands({ made, cloth, box, pictureWidth, pictureHeight, chosen, onChoose, onPull, onRest }: DrawnBandsProps) {
+/** Over the drawn piece: the chosen band is pulled to another height at its square, to another place at its dots. */
+export function DrawnBands({ made, cloth, box, places, square, pictureWidth, pictureHeight, chosen, onPull, onRest }: DrawnBandsProps) {
   const { act } = useHands();
   const area = useRef<SVGSVGElement>(null);
-  const square = useRef<SVGGElement>(null);
   const count = cloth.bands.length;
-  const places = cloth.bands.map((_, index) => placeOfBand(cloth, index, box) ?? { top: 0, height: 0 });
   const bandAt = (number: number): number => (box.begin === 'head' ? number - 1 : count - number);
   const numberOf = (index: number): number => (box.begin === 'head' ? index + 1 : count - index);
   const placeOf = (number: number) => places[bandAt(number)] ?? { top: 0, height: 0 };
@@ -53,13 +59,8 @@ export function DrawnBands({ made, cloth, box, pictureWidth, pictureHeight, chos
     (from, to) => { act({ do: 'move-band', band: bandAt(from), to: bandAt(to) }); },
   );
   const own = places[chosen];
-  const choose = useCallback((index: number) => {
-    onChoose(index);
-    requestAnimationFrame(() => { square.current?.focus({ preventScroll: true }); });
-  }, [onChoose]);
   return (
     <svg ref={area} className="drawn-bands" viewBox={`0 0 ${String(pictureWidth + MARGIN)} ${String(pictureHeight)}`} width={pictureWidth + MARGIN} height={pictureHeight}>
-      {places.map(({ top, height }, index) => <BandHit key={index} index={index} x={box.left} y={box.top + top} width={pictureWidth - 2 * box.left} height={Math.max(6, height)} onChoose={choose} />)}
       {own !== undefined && (
         <>
           <path className="fill-weld-edge" d={`M${String(pictureWidth + 5)} ${(box.top + own.top).toFixed(1)}h7v${Math.max(5, own.height).toFixed(1)}h-7z`} />
@@ -77,16 +78,6 @@ export function DrawnBands({ made, cloth, box, pictureWidth, pictureHeight, chos
   );
 }
 
-interface BandHitProps extends Pick<SVGProps<SVGRectElement>, 'x' | 'y' | 'width' | 'height'> {
-  readonly index: number;
-  readonly onChoose: (index: number) => void;
-}
-
-/** Where a press chooses a band. */
-const BandHit = memo(function BandHit({ index, onChoose, ...place }: BandHitProps) {
-  return <rect className="band-hit" {...place} onClick={() => { onChoose(index); }} />;
-});
-
 function Drop({ y, from, to }: { readonly y: number; readonly from: number; readonly to: number }) {
   return <path className="drop" d={`M${String(from - 6)} ${y.toFixed(1)}H${String(to + 6)}`} />;
 }
@@ -99,8 +90,8 @@ function edgeOf(piece: FrameLoomPiece, chosen: number, { begin, free }: ClothBox
 }
 
 interface HeightSquareProps extends Pick<DrawnBandsProps, 'made' | 'cloth' | 'box' | 'pictureWidth' | 'chosen' | 'onPull' | 'onRest'> {
-  readonly place: { readonly top: number; readonly height: number };
-  readonly ref: React.RefObject<SVGGElement | null>;
+  readonly place: Place;
+  readonly ref: RefObject<SVGGElement | null>;
 }
 
 interface Pull {

@@ -1,11 +1,11 @@
-import { memo, useMemo, useState } from 'react';
-import { hangingBox, loomBox } from '#core/craft/cloth/cloth-box.ts';
+import { memo, useCallback, useMemo, useRef, useState } from 'react';
+import { hangingBox, loomBox, placeOfBand } from '#core/craft/cloth/cloth-box.ts';
 import { wovenHeightMm, type WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
 import type { LayeredView } from '#core/craft/cloth/draw-cloth.ts';
 import type { HeldBand } from '#core/craft/piece-form/band-height.ts';
 import type { TypedPiece } from '#core/craft/piece-form/typed-piece.ts';
 import type { Units } from '#core/units/units.ts';
-import { LiveCloth, useLayeredCloth } from '#islands/cloth/LiveCloth.tsx';
+import { LiveCloth, useLayeredCloth, type BandPlace } from '#islands/cloth/LiveCloth.tsx';
 import { Choose } from '#islands/ui/Choose.tsx';
 import { DrawnBands, type DrawnMade } from './DrawnBands.tsx';
 import { useSame } from './keep-same.ts';
@@ -28,6 +28,8 @@ interface PieceDrawingProps {
 
 type Way = 'hanging' | 'loom';
 const WIDTH = 390;
+/** Pixels; a lower band is pressed a little beside itself. */
+const LEAST_TO_PRESS = 6;
 const WAYS = [{ value: 'hanging', label: 'As it hangs' }, { value: 'loom', label: 'On the loom' }] as const;
 
 /** The piece as it is typed, with a ruler at its side; its bands are chosen, pulled and moved on it. */
@@ -53,11 +55,23 @@ function Stage({ cloth, made, way, units, chosen, isOld, onChoose, onPull, onRes
   const view = useMemo((): LayeredView => ({ id: 'piece', as: way, width: WIDTH, units }), [way, units]);
   const drawn = useLayeredCloth(cloth, view);
   const box = useSame(useMemo(() => (way === 'loom' ? loomBox(cloth, WIDTH) : hangingBox(cloth, WIDTH)), [cloth, way]));
+  const places = cloth.bands.map((_, index) => placeOfBand(cloth, index, box) ?? { top: 0, height: 0 });
+  const square = useRef<SVGGElement>(null);
+  const choose = useCallback((index: number) => {
+    // An old picture may show bands that are gone.
+    if (isOld) return;
+    onChoose(index);
+    requestAnimationFrame(() => { square.current?.focus({ preventScroll: true }); });
+  }, [onChoose, isOld]);
+  const placeOf = (band: number): BandPlace => {
+    const { top, height } = places[band] ?? { top: 0, height: 0 };
+    return { left: box.left, top: box.top + top, width: WIDTH - 2 * box.left, height: Math.max(LEAST_TO_PRESS, height) };
+  };
   return (
     <div className="stage">
       <Ruler box={box} heightMm={wovenHeightMm(cloth)} pictureHeight={drawn.height} units={units} />
-      <LiveCloth drawn={drawn} idOf={(band) => made.typed.bands[band]?.id} />
-      {!isOld && <DrawnBands {...{ made, cloth, box, chosen, onChoose, onPull, onRest }} pictureWidth={WIDTH} pictureHeight={drawn.height} />}
+      <LiveCloth drawn={drawn} idOf={(band) => made.typed.bands[band]?.id} placeOf={placeOf} onChoose={choose} />
+      {!isOld && <DrawnBands {...{ made, cloth, box, places, square, chosen, onPull, onRest }} pictureWidth={WIDTH} pictureHeight={drawn.height} />}
     </div>
   );
 }

@@ -16,7 +16,7 @@ const bands: FrameLoomPiece['bands'] = [
 afterEach(cleanup);
 
 /** The drawn bands, the first one woven at first, each with its marks. */
-const drawn = (): { readonly place: Element; readonly marks: readonly Element[] }[] => [...document.querySelectorAll('.stage .cloth svg > g')].slice(-bands.length).map((place) => ({ place, marks: [...place.children] }));
+const drawn = (): { readonly place: Element; readonly marks: readonly Element[] }[] => [...document.querySelectorAll('.stage .cloth svg > g')].slice(-bands.length).map((place) => ({ place, marks: [...place.firstElementChild?.children ?? []] }));
 
 function show(): void {
   const typed = typePiece({ ...lowTide, yarns: { foam: { metresPer100g: 180, colour: '#e6e4d8' } }, bands }, 'cm');
