@@ -95,7 +95,7 @@ bare.describe('a film', () => {
     await press(student, student.getByRole('button', { name: 'Play' }).first());
     const place = () => student.locator('.lesson-video video').evaluate((video: HTMLVideoElement) => video.currentTime);
     await expect.poll(place, { timeout: 30_000 }).toBeGreaterThan(0.2);
-    await press(student, student.getByRole('link', { name: /Wind/ }));
+    await press(student, student.getByRole('list', { name: 'Chapters' }).getByRole('link', { name: /Wind/ }));
     await expect.poll(place).toBeGreaterThanOrEqual(10);
     const kept = student.waitForResponse('**/api/video-place');
     await student.keyboard.press(' ');
