@@ -37,7 +37,7 @@ export const PieceDrawing = memo(function PieceDrawing({ cloth, made, isOld, cho
   const [way, setWay] = useState<Way>('hanging');
   return (
     <section className="drawing" aria-label="The piece, drawn">
-      <Choose name="way" legend="Drawn" quietLegend options={WAYS} value={way} onChoose={setWay} />
+      <WayChoice way={way} onChoose={setWay} />
       {cloth === null || made === null ? (
         <div className="empty mt-4"><BareWarp /><p>The piece is drawn here as soon as it can be woven: size, loom, yarns and bands are what it needs.</p></div>
       ) : (
@@ -47,6 +47,10 @@ export const PieceDrawing = memo(function PieceDrawing({ cloth, made, isOld, cho
       {!isOld && cloth !== null && <p className="small quiet mt-3 needs-script">Press a band to choose it. Pull its square to change the height, its dots to move it. With keys: go to the square, then arrows, with Shift ten rows at once; Alt and an arrow moves the band.{chosen >= 0 && made?.piece.bands[chosen] !== undefined && 'fill' in made.piece.bands[chosen] && ' This band fills what the others leave, so its height follows theirs.'}</p>}
     </section>
   );
+});
+
+const WayChoice = memo(function WayChoice({ way, onChoose }: { readonly way: Way; readonly onChoose: (way: Way) => void }) {
+  return <Choose name="way" legend="Drawn" quietLegend options={WAYS} value={way} onChoose={onChoose} />;
 });
 
 type StageProps = Omit<PieceDrawingProps, 'cloth' | 'made'> & { readonly cloth: WovenPiece; readonly made: NonNullable<PieceDrawingProps['made']>; readonly way: Way };

@@ -1,4 +1,4 @@
-import { lazy, useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, type SyntheticEvent } from 'react';
+import { lazy, memo, useCallback, useEffect, useMemo, useReducer, useRef, type RefObject, type SyntheticEvent } from 'react';
 import type { StudentLoom } from '#contracts/looms.ts';
 import { clothPieceOf } from '#core/craft/cloth/cloth-piece-of.ts';
 import type { WovenPiece } from '#core/craft/cloth/cloth-piece.ts';
@@ -100,9 +100,9 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
   return (
     <HandsContext value={hands}><ShownContext value={shown}>
       <form ref={form} className="piece-form" method="post" action={action} noValidate aria-label={`The piece of ${series.name}`} onSubmit={trySaving} onFocus={(event) => { tell({ kind: 'enter', field: nameOf(event.target) }); }} onBlur={(event) => { tell({ kind: 'leave', field: nameOf(event.target) }); }}>
-        <input type="hidden" name="series" value={series.slug} />
-        <input type="hidden" name="revision" value={keeping.revision} />
-        <input type="hidden" name="units" value={units} />
+        <Sent name="series" value={series.slug} />
+        <Sent name="revision" value={keeping.revision} />
+        <Sent name="units" value={units} />
         {isOver && keeping.savedAt === null && <input type="hidden" name="over" value="yes" />}
         <FormHead {...{ series, saved, keeping, summary, judged }} isTried={state.isTried} undo={state.past.length === 0 ? null : undo} redo={state.future.length === 0 ? null : redo} />
         {keeping.behind !== null && <div className="other"><OtherPieceNotice other={keeping.behind} title={series.name} onKeep={keepMine} onTake={takeOther} /></div>}
@@ -125,6 +125,11 @@ export function PieceForm({ action, series, revision, typed: first, isTried, isC
     </ShownContext></HandsContext>
   );
 }
+
+/** Goes along with the form. By itself, as an input that is drawn anew is named anew, which a form of a thousand fields feels. */
+const Sent = memo(function Sent({ name, value }: { readonly name: string; readonly value: string | number }) {
+  return <input type="hidden" name={name} value={value} />;
+});
 
 const NOTHING: readonly [] = [];
 const nameOf = (target: EventTarget): string => (target instanceof HTMLInputElement ? target.name : '');
